@@ -1,0 +1,40 @@
+const esm =
+  "node_modules/(?!(react-native|@react-native|@react-native-community|expo|expo-.*|@expo|react-navigation|@react-navigation|pitchy|fft.js|abcjs)/)";
+const alias = { "^@/(.*)$": "<rootDir>/$1" };
+const client = {
+  moduleNameMapper: { ...alias, "\\.woff2?$": "<rootDir>/__tests__/client/fontFile.js" },
+  transformIgnorePatterns: [`/${esm}`],
+};
+const swc = [
+  "@swc/jest",
+  {
+    jsc: {
+      target: "es2022",
+      parser: { syntax: "typescript", decorators: true },
+      transform: { legacyDecorator: true, decoratorMetadata: false, useDefineForClassFields: false },
+    },
+    module: { type: "commonjs" },
+  },
+];
+const node = {
+  testEnvironment: "node",
+  moduleNameMapper: alias,
+  transform: { "^.+\\.[cm]?[jt]s$": swc },
+  transformIgnorePatterns: ["/node_modules/(?!(pitchy|fft\\.js)/)"],
+};
+
+/** @type {import('jest').Config} */
+module.exports = {
+  testTimeout: 30_000,
+  projects: [
+    { ...node, displayName: "engine", testMatch: ["<rootDir>/shared/**/*.test.ts", "<rootDir>/__tests__/engine/**/*.test.ts"] },
+    {
+      ...client,
+      displayName: "client",
+      preset: "jest-expo/web",
+      testMatch: ["<rootDir>/features/**/*.test.ts?(x)", "<rootDir>/__tests__/client/**/*.test.ts?(x)"],
+    },
+    { ...node, displayName: "server", testMatch: ["<rootDir>/server/**/*.test.ts", "<rootDir>/__tests__/server/**/*.test.ts"] },
+    { ...node, displayName: "house", testMatch: ["<rootDir>/__tests__/house/**/*.test.ts"] },
+  ],
+};

@@ -1,0 +1,31 @@
+const http = require("node:http");
+const { getDefaultConfig } = require("expo/metro-config");
+
+const config = getDefaultConfig(__dirname);
+config.resolver.assetExts.push("woff2");
+
+// zod re-exports some 60 locale files; the app needs English only.
+const inherited = config.resolver.resolveRequest;
+config.resolver.resolveRequest = (context, name, platform) =>
+  /[\\/]zod[\\/]v4[\\/]/.test(context.originModulePath) && /locales\/index\.c?js$/.test(name)
+    ? { type: "empty" }
+    : (inherited ?? context.resolveRequest)(context, name, platform);
+
+// In development /api goes to the Express server, so that the client needs no base address in either mode.
+const apiPort = process.env.API_PORT ?? "8401";
+config.server.enhanceMiddleware = (metro) => (req, res, next) => {
+  if (!req.url.startsWith("/api/")) return metro(req, res, next);
+  const onward = http.request(
+    { host: "127.0.0.1", port: apiPort, path: req.url, method: req.method, headers: req.headers },
+    (answer) => {
+      res.writeHead(answer.statusCode, answer.headers);
+      answer.pipe(res);
+    },
+  );
+  onward.on("error", () => {
+    res.statusCode = 502;
+    res.end("The API is not running.");
+  });
+  req.pipe(onward);
+};
+module.exports = config;

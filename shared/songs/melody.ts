@@ -1,0 +1,18 @@
+/** One note of a tune. Start and duration in quarter notes (or seconds where a recording says so). */
+export interface MelodyNote {
+  start: number;
+  duration: number;
+  midi: number;
+}
+
+/** A tune with its home note. */
+export interface Melody {
+  /** ordered by start; durations > 0; monophonic */
+  notes: MelodyNote[];
+  /** tonic spelled in ASCII, such as "D" or "Bb"; null when not known */
+  home: string | null;
+  mode: Mode | null;
+}
+
+/** Church modes as the trade names them; "major" and "minor" stand for ionian and aeolian. */
+export type Mode = "major" | "minor" | "dorian" | "phrygian" | "lydian" | "mixolydian" | "locrian";

@@ -35,6 +35,7 @@ module.exports = {
       testMatch: ["<rootDir>/features/**/*.test.ts?(x)", "<rootDir>/__tests__/client/**/*.test.ts?(x)"],
     },
     { ...node, displayName: "server", testMatch: ["<rootDir>/server/**/*.test.ts", "<rootDir>/__tests__/server/**/*.test.ts"] },
+    { ...node, displayName: "journeys", testMatch: ["<rootDir>/__tests__/journeys/**/*.test.ts"] },
     { ...node, displayName: "house", testMatch: ["<rootDir>/__tests__/house/**/*.test.ts"] },
   ],
 };

@@ -1,0 +1,77 @@
+// All checks of the house, and one closing line over them.
+import { spawn } from "node:child_process";
+import fs from "node:fs";
+import os from "node:os";
+import path from "node:path";
+import { ensureWebClient } from "./webClient.mjs";
+
+/** Runs every check (or only those named) and prints the closing line; returns the exit code. */
+export async function runChecks({ root, say, databaseUrl, only }) {
+  const env = { ...process.env, TEST_DATABASE_URL: databaseUrl, NODE_ENV: "test", EXPO_NO_TELEMETRY: "1", EXPO_OFFLINE: "1" };
+  const bin = (...parts) => path.join(root, "node_modules", ...parts);
+  const tally = { passed: 0, failed: 0 };
+  const failures = [];
+
+  const node = (args) =>
+    new Promise((done) => {
+      const child = spawn(process.execPath, args, { cwd: root, env, stdio: ["ignore", "pipe", "pipe"] });
+      let output = "";
+      for (const stream of [child.stdout, child.stderr]) stream.on("data", (data) => (output += data));
+      child.on("exit", (code) => done({ code, output }));
+    });
+
+  const step = (name, run) => ({ name, run });
+  const plain = (name, ...args) =>
+    step(name, async () => {
+      const { code, output } = await node(args);
+      return { passed: code === 0 ? 1 : 0, failed: code === 0 ? 0 : 1, output };
+    });
+  const jest = (name, projects, ...more) =>
+    step(name, async () => {
+      const report = path.join(os.tmpdir(), `larkspan-${process.pid}-${name.replaceAll(" ", "-")}.json`);
+      const args = [bin("jest", "bin", "jest.js"), "--selectProjects", ...projects, "--json", "--outputFile", report, ...more];
+      const { code, output } = await node(args);
+      if (!fs.existsSync(report)) return { passed: 0, failed: 1, output };
+      const result = JSON.parse(fs.readFileSync(report, "utf8"));
+      fs.rmSync(report);
+      const failed = result.numFailedTests + result.numRuntimeErrorTestSuites;
+      return { passed: result.numPassedTests, failed: failed || (code === 0 ? 0 : 1), output };
+    });
+
+  const lanes = [
+    [
+      plain("types", bin("typescript", "bin", "tsc"), "--noEmit"),
+      plain("types of the pure engine", bin("typescript", "bin", "tsc"), "-p", "tsconfig.shared.json"),
+      plain("lint", bin("eslint", "bin", "eslint.js"), ".", "--max-warnings", "0"),
+      plain("dependency rules", bin("dependency-cruiser", "bin", "dependency-cruise.mjs"), "--config", ".dependency-cruiser.cjs", "app", "features", "server", "shared"),
+      plain("dead code", bin("knip", "bin", "knip.js")),
+      step("web client", async () => {
+        try {
+          await ensureWebClient({ root, say: () => {} });
+          return { passed: 1, failed: 0, output: "" };
+        } catch (error) {
+          return { passed: 0, failed: 1, output: error.message };
+        }
+      }),
+    ],
+    [jest("house", ["house"], "-w", "1"), jest("client", ["client"], "-w", "1"), jest("server", ["server"], "-w", "1"), jest("engine", ["engine"], "-w", "1")],
+  ];
+  const last = [jest("browser journeys", ["journeys"], "-w", "1")];
+
+  const runAll = async (steps) => {
+    for (const { name, run } of steps) {
+      if (only.length > 0 && !only.includes(name)) continue;
+      const begun = performance.now();
+      const { passed, failed, output } = await run();
+      tally.passed += passed;
+      tally.failed += failed;
+      say(`${failed ? "FAILED" : "ok    "} ${name}: ${passed} passed, ${failed} failed (${((performance.now() - begun) / 1000).toFixed(1)} s)`);
+      if (failed) failures.push(`\n--- ${name} ---\n${output.trim()}`);
+    }
+  };
+  await Promise.all(lanes.map(runAll));
+  await runAll(last);
+  for (const failure of failures) say(failure);
+  process.stdout.write(`${tally.passed} passed, ${tally.failed} failed\n`);
+  return tally.failed === 0 && tally.passed > 0 ? 0 : 1;
+}

@@ -1,0 +1,24 @@
+// Debian packages that a command of ours needs, installed when they are missing and we may.
+import { spawnSync } from "node:child_process";
+
+/** Makes sure that the named Debian packages are there; returns the names of those that could not be had. */
+export function ensureDebianPackages(names, say) {
+  const missing = names.filter((name) => !installed(name));
+  if (missing.length === 0) return [];
+  const may = process.getuid?.() === 0 ? [] : spawnSync("sudo", ["-n", "true"]).status === 0 ? ["sudo", "-n"] : null;
+  if (!may || spawnSync("which", ["apt-get"]).status !== 0) return missing;
+  say(`Installing from Debian: ${missing.join(", ")}`);
+  const apt = (...args) => {
+    const line = [...may, "env", "DEBIAN_FRONTEND=noninteractive", "apt-get", "-q", "-o", "DPkg::Lock::Timeout=300", ...args];
+    return spawnSync(line[0], line.slice(1), { encoding: "utf8", maxBuffer: 1 << 26 });
+  };
+  apt("update");
+  const run = apt("install", "-y", "--no-install-recommends", ...missing);
+  if (run.status !== 0) say(run.stderr.trim().split("\n").slice(-3).join("\n"));
+  return missing.filter((name) => !installed(name));
+}
+
+function installed(name) {
+  const query = spawnSync("dpkg-query", ["-W", "-f=${Status}", name], { encoding: "utf8" });
+  return query.status === 0 && query.stdout.includes("install ok installed");
+}

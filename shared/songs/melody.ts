@@ -1,3 +1,5 @@
+import type { Mode } from "../music/keyName";
+
 /** One note of a tune. Start and duration in quarter notes (or seconds where a recording says so). */
 export interface MelodyNote {
   start: number;
@@ -13,6 +15,3 @@ export interface Melody {
   home: string | null;
   mode: Mode | null;
 }
-
-/** Church modes as the trade names them; "major" and "minor" stand for ionian and aeolian. */
-export type Mode = "major" | "minor" | "dorian" | "phrygian" | "lydian" | "mixolydian" | "locrian";

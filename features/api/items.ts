@@ -1,0 +1,30 @@
+import type { Decision } from "@/shared/contract/decision";
+import type { OwnInstrument } from "@/shared/contract/instrument";
+import type { Song } from "@/shared/contract/song";
+import type { Take } from "@/shared/contract/take";
+import type { Voice } from "@/shared/contract/voice";
+
+/** The owned collections and what they hold. */
+export interface Items {
+  voices: Voice;
+  takes: Take;
+  songs: Song;
+  decisions: Decision;
+  instruments: OwnInstrument;
+}
+
+export type Collection = keyof Items;
+
+/** Parents stand before what refers to them. */
+export const collections = ["voices", "takes", "songs", "decisions", "instruments"] as const satisfies readonly Collection[];
+
+/** One person's belongings, wherever they are kept. Everything rejects with ApiError only. */
+export interface Shelf {
+  list<C extends Collection>(name: C): Promise<Items[C][]>;
+  /** Rejects with 404 "not-found" where there is none. */
+  get<C extends Collection>(name: C, id: string): Promise<Items[C]>;
+  /** Creates or replaces, by the item's own id. */
+  put<C extends Collection>(name: C, item: Items[C]): Promise<Items[C]>;
+  /** Takes go with their voice, decisions with their song. Removing what is not there is no error. */
+  remove(name: Collection, id: string): Promise<void>;
+}

@@ -1,4 +1,6 @@
 const http = require("node:http");
+const path = require("node:path");
+const esbuild = require("esbuild");
 const { getDefaultConfig } = require("expo/metro-config");
 
 const config = getDefaultConfig(__dirname);
@@ -11,9 +13,25 @@ config.resolver.resolveRequest = (context, name, platform) =>
     ? { type: "empty" }
     : (inherited ?? context.resolveRequest)(context, name, platform);
 
+// Metro moves modules that a worker shares with a page into the page's chunk, where the worker cannot reach them.
+const takeWorker = "/worklets/takeWorker.js";
+const bundleTakeWorker = () =>
+  esbuild.buildSync({
+    absWorkingDir: __dirname,
+    entryPoints: ["features/voice/recorder/takeWorker.ts"],
+    outfile: path.join("public", takeWorker),
+    bundle: true,
+    minify: true,
+    format: "iife",
+    target: ["es2022"],
+    logLevel: "error",
+  });
+bundleTakeWorker();
+
 // In development /api goes to the Express server, so that the client needs no base address in either mode.
 const apiPort = process.env.API_PORT ?? "8401";
 config.server.enhanceMiddleware = (metro) => (req, res, next) => {
+  if (req.url === takeWorker) bundleTakeWorker();
   if (!req.url.startsWith("/api/")) return metro(req, res, next);
   const onward = http.request(
     { host: "127.0.0.1", port: apiPort, path: req.url, method: req.method, headers: req.headers },

@@ -1,0 +1,127 @@
+import type { LiveFrame } from "@/shared/voice/liveTracker";
+import type { TakeReport } from "@/shared/voice/takeReport";
+import { longestTakeS } from "./takeProtocol";
+import type { FromTakeWorker, TakeSound, ToTakeWorker } from "./takeProtocol";
+
+/** What the listener needs of the engine and of the device; the worker passes the real ones. */
+export interface TakeTools {
+  createTracker(sampleRate: number): { push(pcm: Float32Array): LiveFrame[] };
+  judge(pcm: Float32Array, sampleRate: number): TakeReport;
+  /** stores one second of sound on the device, against a reload */
+  keepPart(id: string, index: number, pcm: Float32Array<ArrayBuffer>): void;
+  post(message: FromTakeWorker, transfer?: Transferable[]): void;
+}
+
+interface OpenTake {
+  id: string;
+  sampleRate: number;
+  tracker: ReturnType<TakeTools["createTracker"]>;
+  pcm: Float32Array<ArrayBuffer>;
+  length: number;
+  kept: number;
+  parts: number;
+  sound: MessagePort;
+  ended: boolean;
+  judgeAtEnd: boolean;
+}
+
+/** The worker's whole behaviour, apart from being a worker. */
+export function createTakeListener(tools: TakeTools): (message: ToTakeWorker) => void {
+  let take: OpenTake | null = null;
+
+  const judge = (pcm: Float32Array<ArrayBuffer>, sampleRate: number) => {
+    try {
+      const report = tools.judge(pcm, sampleRate);
+      tools.post({ kind: "judged", report, pcm, sampleRate }, [pcm.buffer]);
+    } catch (fault) {
+      tools.post({ kind: "broken", reason: String(fault) });
+    }
+  };
+  const finish = (open: OpenTake) => {
+    take = null;
+    open.sound.close();
+    judge(open.pcm.slice(0, open.length), open.sampleRate);
+  };
+  const drop = () => {
+    take?.sound.close();
+    take = null;
+  };
+
+  return (message) => {
+    switch (message.kind) {
+      case "begin": {
+        drop();
+        const open = openTake(message, tools);
+        open.sound.onmessage = ({ data }: MessageEvent<TakeSound>) => {
+          if (take !== open) return;
+          if (data.kind === "block") {
+            listen(open, data.pcm, tools);
+            return;
+          }
+          open.ended = true;
+          if (open.judgeAtEnd) finish(open);
+        };
+        take = open;
+        return;
+      }
+      case "judge":
+        if (!take) return;
+        // Blocks on their way through the other port belong to the take: wait for its end mark.
+        if (take.ended || !message.endIsComing) finish(take);
+        else take.judgeAtEnd = true;
+        return;
+      case "judgeKept":
+        drop();
+        judge(message.pcm, message.sampleRate);
+        return;
+      case "drop":
+        drop();
+    }
+  };
+}
+
+function openTake({ sampleRate, sound, keepAs }: ToTakeWorker & { kind: "begin" }, tools: TakeTools): OpenTake {
+  return {
+    id: keepAs,
+    sampleRate,
+    sound,
+    tracker: tools.createTracker(sampleRate),
+    pcm: new Float32Array(Math.ceil(sampleRate * longestTakeS)),
+    length: 0,
+    kept: 0,
+    parts: 0,
+    ended: false,
+    judgeAtEnd: false,
+  };
+}
+
+function listen(take: OpenTake, block: Float32Array<ArrayBuffer>, tools: TakeTools): void {
+  const pcm = block.subarray(0, take.pcm.length - take.length);
+  if (pcm.length === 0) return;
+  take.pcm.set(pcm, take.length);
+  take.length += pcm.length;
+  let frames: LiveFrame[];
+  try {
+    frames = take.tracker.push(pcm);
+  } catch (fault) {
+    tools.post({ kind: "broken", reason: String(fault) });
+    return;
+  }
+  tools.post({ kind: "heard", frames, seconds: take.length / take.sampleRate, ...loudness(pcm) });
+  if (take.length - take.kept >= take.sampleRate) {
+    tools.keepPart(take.id, take.parts, take.pcm.slice(take.kept, take.length));
+    take.parts += 1;
+    take.kept = take.length;
+  }
+}
+
+function loudness(pcm: Float32Array): { levelDb: number; peak: number } {
+  let peak = 0;
+  let power = 0;
+  for (const sample of pcm) {
+    peak = Math.max(peak, Math.abs(sample));
+    power += sample * sample;
+  }
+  // AES17: a full-scale sine is 0 dBFS; the floor keeps silence finite.
+  return { peak, levelDb: Math.max(-120, 10 * Math.log10((2 * power) / pcm.length + 1e-12)) };
+}

@@ -1,0 +1,105 @@
+import { useCallback, useEffect, useReducer, useRef, useState } from "react";
+import { createCapture, type Capture } from "./capture";
+import { createLiveSound, type LiveSound } from "./liveSound";
+import { idle, recorder, type RecorderState } from "./recorder";
+import { dropStale, dropUnkept, markTakeOfThisTab, readUnkept, saveUnkept, takeOfThisTab } from "./unkeptTake";
+
+/** Less than this is not worth judging after a reload. */
+const leastS = 1;
+
+export interface Recorder {
+  state: RecorderState;
+  /** true until it is known whether this tab still has a take that nobody kept */
+  restoring: boolean;
+  live: LiveSound;
+  sing(): void;
+  stop(): void;
+  /** Forgets the take, its sound and its numbers. */
+  leave(): void;
+  felt(warmedUp: boolean | null, effort: number | null): void;
+}
+
+/** The recorder of this tab: runs the microphone and the worker as the machine's steps ask, and survives a reload. */
+export function useRecorder(): Recorder {
+  const [state, dispatch] = useReducer(recorder, idle);
+  const [restoring, setRestoring] = useState(() => takeOfThisTab() !== null);
+  const [live] = useState(createLiveSound);
+  const capture = useRef<Capture | null>(null);
+
+  useEffect(() => {
+    const own = createCapture(dispatch, live);
+    capture.current = own;
+    let here = true;
+    void restore(own, dispatch, () => here).finally(() => here && setRestoring(false));
+    return () => {
+      here = false;
+      own.close();
+      capture.current = null;
+    };
+  }, [live]);
+
+  const { step } = state;
+  useEffect(() => {
+    if (step === "asking") void capture.current?.start();
+    if (step === "stopping") void capture.current?.stop();
+    if (step === "failure") {
+      capture.current?.drop();
+      forget();
+    }
+  }, [step]);
+
+  const take = state.step === "result" ? state.take : null;
+  useEffect(() => {
+    if (take) void saveUnkept(take).catch(() => undefined);
+  }, [take]);
+
+  const sing = useCallback(() => {
+    forget();
+    dispatch({ kind: "ask" });
+  }, []);
+  const stop = useCallback(() => dispatch({ kind: "stop" }), []);
+  const leave = useCallback(() => {
+    capture.current?.drop();
+    forget();
+    dispatch({ kind: "leave" });
+  }, []);
+  const felt = useCallback(
+    (warmedUp: boolean | null, effort: number | null) => dispatch({ kind: "felt", warmedUp, effort }),
+    [],
+  );
+  return { state, restoring, live, sing, stop, leave, felt };
+}
+
+/** Only what this tab recorded is erased: the mark names it. */
+function forget(): void {
+  const id = takeOfThisTab();
+  markTakeOfThisTab(null);
+  if (id !== null) void dropUnkept(id).catch(() => undefined);
+}
+
+async function restore(
+  capture: Capture,
+  dispatch: (event: Parameters<typeof recorder>[1]) => void,
+  isHere: () => boolean,
+): Promise<void> {
+  const id = takeOfThisTab();
+  try {
+    await dropStale(Date.now());
+    const found = id === null ? null : await readUnkept(id);
+    if (!found || !isHere()) return;
+    if ("result" in found) {
+      dispatch({ kind: "restored", take: found.result });
+      return;
+    }
+    const { cutOff } = found;
+    const seconds = cutOff.pcm.length / cutOff.sampleRate;
+    if (seconds < leastS) {
+      forget();
+      return;
+    }
+    dispatch({ kind: "rejudging", id: cutOff.id, sungAt: cutOff.sungAt, seconds });
+    capture.judgeKept(cutOff);
+  } catch {
+    // Without the device's storage there is nothing to restore, and singing works all the same.
+  }
+}

@@ -1,0 +1,42 @@
+import type { Decision } from "@/shared/contract/decision";
+import { tonicPitchClass, type KeyName } from "@/shared/music/keyName";
+import type { Way } from "@/shared/ways/way";
+
+/** What was chosen on the page. */
+export interface Choice {
+  songId: string;
+  tonic: string;
+  shift: number;
+  /** null where no voice or no tune let the key be scored */
+  score: number | null;
+  reason: string;
+  voiceId: string | null;
+  instrument: string | null;
+  way: Pick<Way, "retune" | "capo" | "shapeKey"> | null;
+}
+
+/** The decision that keeps a choice. One a song: it takes the place, and the id, of the one before. */
+export function decide(choice: Choice, before: Decision | null, newId: () => string, now: Date): Decision {
+  const { way, reason, score, ...rest } = choice;
+  return {
+    ...rest,
+    id: before?.id ?? newId(),
+    score: score === null ? null : Math.min(100, Math.max(0, score)),
+    reason: reason.length > 300 ? `${reason.slice(0, 299)}…` : reason,
+    way: way && { retune: way.retune, capo: way.capo, shapeKey: way.shapeKey },
+    decidedAt: now.toISOString(),
+  };
+}
+
+/** A decision made for a chart whose key was changed since no longer says where to play it. */
+export function stillFits(decision: Decision, written: KeyName | null): boolean {
+  if (written === null) return true;
+  const target = (((tonicPitchClass(written.tonic) + decision.shift) % 12) + 12) % 12;
+  return tonicPitchClass(decision.tonic) === target;
+}
+
+/** When a key was chosen, in words. */
+export function decidedOn(decision: Decision): string {
+  const date = new Date(decision.decidedAt);
+  return new Intl.DateTimeFormat("en-GB", { day: "numeric", month: "long", year: "numeric" }).format(date);
+}

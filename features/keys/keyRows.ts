@@ -1,0 +1,111 @@
+import type { SingingVoice, KeyMark, KeyParts, KeyScore } from "@/shared/keys/keyScore";
+import { type KeyName, tonicPitchClass } from "@/shared/music/keyName";
+import { keySign, movedKey } from "@/shared/music/keyWords";
+import { shortMove } from "@/shared/music/moveWords";
+import { glyphs, noteName } from "@/shared/music/pitch";
+
+/** Room between the tune's end and the voice's, as a table shows it. */
+export interface Room {
+  /** semitones; negative = the tune leaves the voice */
+  semitones: number;
+  text: string;
+  tone: "ink" | "honey" | "brick";
+}
+
+/** One key as rows and cards show it. All texts with glyphs. */
+export interface KeyRow {
+  key: KeyName;
+  sign: string;
+  shift: number;
+  moved: string;
+  score: number;
+  parts: KeyParts;
+  reason: string;
+  beyond: boolean;
+  coarse: boolean;
+  below: Room;
+  above: Room;
+  lowMidi: number;
+  highMidi: number;
+  span: string;
+  marks: KeyMark[];
+  chords: string[];
+  /** the whole row as a sentence or two */
+  spoken: string;
+}
+
+export type KeyOrder = "score" | "move" | "below" | "above";
+
+export const keyOrders: readonly { value: KeyOrder; label: string }[] = [
+  { value: "score", label: "best score first" },
+  { value: "move", label: "nearest to the chart first" },
+  { value: "above", label: "most room above first" },
+  { value: "below", label: "most room below first" },
+];
+
+/** Scores as rows, best first. `chordsIn` gives the song's chords in a key. */
+export function keyRows(scores: readonly KeyScore[], written: KeyName, chordsIn: (key: KeyName) => readonly string[]): KeyRow[] {
+  return scores.map((score) => {
+    const key = movedKey(written, score.shift);
+    const sign = glyphs(keySign(key));
+    const span = spanWords(score, key);
+    const points = Math.round(score.score);
+    return {
+      key,
+      sign,
+      shift: score.shift,
+      moved: shortMove(score.shift),
+      score: points,
+      parts: score.parts,
+      reason: score.reason,
+      beyond: score.beyond,
+      coarse: score.coarse,
+      below: room(score.reserves.lower, "▼"),
+      above: room(score.reserves.upper, "▲"),
+      lowMidi: score.lowMidi,
+      highMidi: score.highMidi,
+      span,
+      marks: score.marks,
+      chords: chordsIn(key).map(glyphs),
+      spoken: `${sign}, ${points} of 100. The tune runs ${span}. ${score.reason}`,
+    };
+  });
+}
+
+/** The rows in the order asked for; rows that are equal in it stay best first. */
+export function sortedRows(rows: readonly KeyRow[], order: KeyOrder): KeyRow[] {
+  const cost: Record<KeyOrder, (row: KeyRow, place: number) => number> = {
+    score: (_, place) => place,
+    move: (row) => Math.abs(row.shift),
+    above: (row) => -row.above.semitones,
+    below: (row) => -row.below.semitones,
+  };
+  return rows
+    .map((row, place) => ({ row, cost: cost[order](row, place), place }))
+    .sort((a, b) => a.cost - b.cost || a.place - b.place)
+    .map(({ row }) => row);
+}
+
+/** The row of a tonic and move; the same tonic in another octave where the move is not among them. */
+export function rowOf(rows: readonly KeyRow[], tonic: string, shift: number | null): KeyRow | null {
+  const same = rows.filter((row) => tonicPitchClass(row.key.tonic) === tonicPitchClass(tonic));
+  return same.find((row) => row.shift === shift) ?? same[0] ?? null;
+}
+
+/** Lowest and highest pitch that any row or the voice reaches, with a semitone or two of air: one scale for all. */
+export function commonScale(rows: readonly KeyRow[], voice: SingingVoice): { lowMidi: number; highMidi: number } {
+  const lows = [voice.range.lowMidi, ...rows.map((row) => row.lowMidi)];
+  const highs = [voice.range.highMidi, ...rows.map((row) => row.highMidi)];
+  return { lowMidi: Math.floor(Math.min(...lows)) - 2, highMidi: Math.ceil(Math.max(...highs)) + 2 };
+}
+
+function spanWords(score: KeyScore, key: KeyName): string {
+  const spelling = key.tonic.includes("b") || key.tonic === "F" ? "flats" : "sharps";
+  return glyphs(`${noteName(score.lowMidi, spelling)} to ${noteName(score.highMidi, spelling)}`);
+}
+
+function room(reserve: number, sign: string): Room {
+  const semitones = Math.round(reserve);
+  if (semitones < 0) return { semitones, text: `${sign} ${-semitones}`, tone: "brick" };
+  return { semitones, text: String(semitones), tone: semitones <= 1 ? "honey" : "ink" };
+}

@@ -1,0 +1,62 @@
+import { chartCells } from "./chartCells";
+
+const line = "Lantern on the slipway, burning low,";
+const chords = [
+  { column: 0, text: "D" },
+  { column: 15, text: "G" },
+  { column: 32, text: "D" },
+];
+
+test("a line wraps at its words and each chord stays over its syllable", () => {
+  const cells = chartCells(line, chords);
+  expect(cells.map((cell) => cell.text)).toEqual(["Lantern ", "on ", "the ", "slipway, ", "burning ", "low,"]);
+  expect(cells[3]?.chords).toEqual([{ column: 0, text: "G" }]);
+  expect(cells[5]?.chords).toEqual([{ column: 0, text: "D" }]);
+});
+
+test("cells laid end to end give back every column", () => {
+  const cells = chartCells(line, chords);
+  let start = 0;
+  const back = cells.flatMap((cell) => {
+    const placed = cell.chords.map((chord) => ({ column: start + chord.column, text: chord.text }));
+    start += cell.width;
+    return placed;
+  });
+  expect(back).toEqual(chords);
+  expect(cells.map((cell) => cell.text).join("")).toBe(line);
+});
+
+test("a chord in the middle of a word does not cut the word", () => {
+  expect(chartCells("harbour", [{ column: 3, text: "Am" }])).toEqual([
+    { text: "harbour", width: 7, chords: [{ column: 3, text: "Am" }] },
+  ]);
+});
+
+test("a chord longer than its word keeps the next word with it", () => {
+  const cells = chartCells("I know it", [{ column: 0, text: "F#m7b5" }]);
+  expect(cells.map((cell) => cell.text)).toEqual(["I know ", "it"]);
+});
+
+test("a chord behind the last word gets room of its own", () => {
+  const cells = chartCells("shore", [
+    { column: 0, text: "D" },
+    { column: 8, text: "A7" },
+  ]);
+  expect(cells.map((cell) => [cell.text, cell.chords[0]?.text])).toEqual([
+    ["shore   ", "D"],
+    ["  ", "A7"],
+  ]);
+});
+
+test("chords without words wrap between chords", () => {
+  const cells = chartCells("", [
+    { column: 0, text: "D" },
+    { column: 4, text: "G" },
+    { column: 8, text: "A" },
+  ]);
+  expect(cells.map((cell) => cell.chords[0]?.text)).toEqual(["D", "G", "A"]);
+});
+
+test("an empty line has no cells", () => {
+  expect(chartCells("", [])).toEqual([]);
+});

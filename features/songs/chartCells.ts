@@ -1,0 +1,52 @@
+/** A chord at a column of its line. */
+export interface PlacedChord {
+  column: number;
+  text: string;
+}
+
+/** A stretch of a chart line that never breaks: its words and every chord that stands over them. */
+export interface ChartCell {
+  /** the words with their blanks, padded to `width` */
+  text: string;
+  /** columns taken, blanks behind the last word included */
+  width: number;
+  /** chords, their columns counted from the start of the cell */
+  chords: PlacedChord[];
+}
+
+/**
+ * Cuts a line into cells at which it may wrap. A chord stays over its syllable in whatever row the cell lands,
+ * and a chord longer than its word keeps the next word beside it, so that columns hold inside each row.
+ */
+export function chartCells(lyrics: string, chords: readonly PlacedChord[]): ChartCell[] {
+  const end = Math.max(lyrics.length, ...chords.map((chord) => chord.column + chord.text.length), 0);
+  const line = lyrics.padEnd(end);
+  const cells: ChartCell[] = [];
+  let start = 0;
+  for (const stop of breaks(line, chords)) {
+    const text = line.slice(start, stop);
+    const from = start;
+    cells.push({
+      text,
+      width: stop - start,
+      chords: chords
+        .filter((chord) => chord.column >= from && chord.column < stop)
+        .map((chord) => ({ column: chord.column - from, text: chord.text })),
+    });
+    start = stop;
+  }
+  return cells;
+}
+
+/** Columns behind which the line may wrap: before a word, or before a chord over blanks, never inside a chord. */
+function breaks(line: string, chords: readonly PlacedChord[]): number[] {
+  const stops: number[] = [];
+  for (let column = 1; column < line.length; column++) {
+    const wordStarts = line[column] !== " " && line[column - 1] === " ";
+    const chordOverBlanks = line[column] === " " && line[column - 1] === " " && chords.some((chord) => chord.column === column);
+    const insideChord = chords.some((chord) => chord.column < column && chord.column + chord.text.length >= column);
+    if ((wordStarts || chordOverBlanks) && !insideChord) stops.push(column);
+  }
+  if (line.length > 0) stops.push(line.length);
+  return stops;
+}

@@ -65,7 +65,7 @@ async function moveAll(entry: Entry): Promise<void> {
   const owner = session.current().account?.id;
   const belongings = await readBelongings();
   const total = collections.reduce((sum, name) => sum + belongings.items[name].length, 0);
-  publish({ status: "moving", moved: 0, total, stayed: [] });
+  if (total > 0) publish({ status: "moving", total });
   const superfluous = await isSuperfluous(entry, belongings);
   const stayed = new Map<string, StayedBehind>();
 
@@ -100,6 +100,7 @@ async function alone(work: () => Promise<void>): Promise<void> {
 }
 
 async function run(entry: Entry): Promise<MoveInState> {
+  publish({ moved: 0, total: 0, stayed: [] });
   try {
     await alone(() => moveAll(entry));
     publish({ status: "done" });

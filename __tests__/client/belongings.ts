@@ -1,0 +1,72 @@
+import type { Decision } from "@/shared/contract/decision";
+import type { OwnInstrument } from "@/shared/contract/instrument";
+import type { Song } from "@/shared/contract/song";
+import type { Take } from "@/shared/contract/take";
+import type { Voice } from "@/shared/contract/voice";
+
+let serial = 0;
+const nextId = () => `10000000-0000-4000-8000-${String(++serial).padStart(12, "0")}`;
+const when = "2026-03-05T18:30:00.000Z";
+const band = { lowMidi: 45, highMidi: 62 };
+
+export const aVoice = (change: Partial<Voice> = {}): Voice => ({ id: nextId(), name: "Maren", byHand: null, createdAt: when, ...change });
+
+export const aTake = (voiceId: string, change: Partial<Take> = {}): Take => ({
+  id: nextId(),
+  voiceId,
+  sungAt: when,
+  warmedUp: null,
+  effort: 2,
+  durationS: 9,
+  range: band,
+  comfort: band,
+  estimate: band,
+  tuningCents: 4,
+  certainty: 0.9,
+  reasons: ["Heard clearly in 14 of 16 notes."],
+  notes: [],
+  ...change,
+});
+
+export const aSong = (change: Partial<Song> = {}): Song => {
+  const id = nextId();
+  return {
+    id,
+    title: `Song ${id.slice(-2)}`,
+    chart: "D  A\nlow water",
+    writtenKey: { tonic: "D", mode: "major" },
+    tune: null,
+    beatsPerBar: 4,
+    tempo: 92,
+    demo: null,
+    createdAt: when,
+    ...change,
+  };
+};
+
+export const aDecision = (songId: string, voiceId: string | null, change: Partial<Decision> = {}): Decision => ({
+  id: nextId(),
+  songId,
+  voiceId,
+  tonic: "C",
+  shift: -2,
+  score: 88,
+  reason: "Sits well.",
+  instrument: null,
+  way: null,
+  decidedAt: when,
+  ...change,
+});
+
+export const anInstrument = (change: Partial<OwnInstrument> = {}): OwnInstrument => ({
+  id: nextId(),
+  presetId: null,
+  name: "Box of the slipway",
+  strings: [{ note: "A3", gaugeIn: null, material: "unknown" }],
+  scaleMm: 610,
+  frets: 18,
+  capoTo: 7,
+  leftHanded: false,
+  favourite: true,
+  ...change,
+});

@@ -1,0 +1,154 @@
+import { signInRequest, signUpRequest } from "@/shared/contract/account";
+import { decision } from "@/shared/contract/decision";
+import { ownInstrument } from "@/shared/contract/instrument";
+import { song } from "@/shared/contract/song";
+import { take } from "@/shared/contract/take";
+import { voice } from "@/shared/contract/voice";
+
+interface Person {
+  id: string;
+  email: string;
+  password: string;
+}
+
+interface Answer {
+  status: number;
+  body?: unknown;
+}
+
+interface Row {
+  owner: string;
+  item: { id: string } & Record<string, unknown>;
+}
+
+const schemas = { voices: voice, takes: take, songs: song, decisions: decision, instruments: ownInstrument };
+type Name = keyof typeof schemas;
+
+const problem = (status: number, code: string, message: string, fields?: unknown): Answer => ({
+  status,
+  body: fields === undefined ? { code, message } : { code, message, fields },
+});
+
+function reply({ status, body }: Answer) {
+  return { ok: status < 400, status, json: async () => JSON.parse(JSON.stringify(body)) as unknown };
+}
+
+/** The API's contract, kept in memory, behind `fetch`. */
+export class FakeApi {
+  readonly calls: string[] = [];
+  readonly tables: Record<Name, Map<string, Row>> = { voices: new Map(), takes: new Map(), songs: new Map(), decisions: new Map(), instruments: new Map() };
+  /** Answers in the server's place, or "down" for a network that fails. */
+  intercept: (method: string, path: string) => Answer | "down" | undefined = () => undefined;
+
+  #people: Person[] = [];
+  #tokens = new Map<string, string>();
+  #cookie: string | null = null;
+  #sessions = new Map<string, string>();
+  #serial = 0;
+
+  install(): void {
+    globalThis.fetch = ((url: string, init: RequestInit) => this.#fetch(url, init)) as unknown as typeof fetch;
+  }
+
+  addPerson(email: string, password: string): string {
+    const id = `00000000-0000-4000-8000-${String(this.#people.length + 1).padStart(12, "0")}`;
+    this.#people.push({ id, email, password });
+    return id;
+  }
+
+  /** A refresh cookie from an earlier visit. */
+  rememberVisit(personId: string): void {
+    this.#open(personId);
+  }
+
+  expireAccessTokens(): void {
+    this.#tokens.clear();
+  }
+
+  endSessions(): void {
+    this.#tokens.clear();
+    this.#sessions.clear();
+  }
+
+  count(call: string): number {
+    return this.calls.filter((each) => each === call).length;
+  }
+
+  #open(personId: string): void {
+    this.#cookie = `refresh-${++this.#serial}`;
+    this.#sessions.set(this.#cookie, personId);
+  }
+
+  #session(status: number, personId: string): Answer {
+    const accessToken = `access-${++this.#serial}`;
+    this.#tokens.set(accessToken, personId);
+    const person = this.#people.find((each) => each.id === personId);
+    return { status, body: { accessToken, expiresInS: 600, account: { id: personId, email: person?.email, role: "singer" } } };
+  }
+
+  async #fetch(url: string, init: RequestInit) {
+    const method = init.method ?? "GET";
+    const path = url.replace(/^\/api/, "");
+    this.calls.push(`${method} ${path}`);
+    // Lets other callers in between, as a network does.
+    await new Promise((resolve) => setTimeout(resolve, 0));
+    const instead = this.intercept(method, path);
+    if (instead === "down") throw new TypeError("Failed to fetch");
+    if (instead) return reply(instead);
+    const body: unknown = typeof init.body === "string" ? JSON.parse(init.body) : undefined;
+    return reply(path.startsWith("/auth/") ? this.#auth(path, body) : this.#collection(method, path, init, body));
+  }
+
+  #auth(path: string, body: unknown): Answer {
+    if (path === "/auth/sign-out") {
+      if (this.#cookie) this.#sessions.delete(this.#cookie);
+      this.#cookie = null;
+      return { status: 204 };
+    }
+    if (path === "/auth/refresh") {
+      const personId = this.#cookie === null ? undefined : this.#sessions.get(this.#cookie);
+      if (personId === undefined || this.#cookie === null) return problem(401, "no-session", "Sign in again.");
+      this.#sessions.delete(this.#cookie);
+      this.#open(personId);
+      return this.#session(200, personId);
+    }
+    const parsed = (path === "/auth/sign-up" ? signUpRequest : signInRequest).safeParse(body);
+    if (!parsed.success)
+      return problem(400, "invalid", "Something is missing.", parsed.error.issues.map((issue) => ({ path: issue.path.join("."), message: issue.message })));
+    const { email, password } = parsed.data;
+    const known = this.#people.find((each) => each.email === email);
+    if (path === "/auth/sign-up") {
+      if (known) return problem(409, "email-taken", "There is an account with this e-mail address already.");
+      const id = this.addPerson(email, password);
+      this.#open(id);
+      return this.#session(201, id);
+    }
+    if (known?.password !== password) return problem(401, "wrong-credentials", "E-mail address and password do not belong together.");
+    this.#open(known.id);
+    return this.#session(200, known.id);
+  }
+
+  #collection(method: string, path: string, init: RequestInit, body: unknown): Answer {
+    const token = (init.headers as Record<string, string>)["Authorization"]?.replace("Bearer ", "");
+    const owner = token === undefined ? undefined : this.#tokens.get(token);
+    if (owner === undefined) return problem(401, "not-signed-in", "Sign in first.");
+    const [, name, id] = path.split("/") as [string, Name, string | undefined];
+    const table = this.tables[name];
+    if (id === undefined) return { status: 200, body: [...table.values()].filter((row) => row.owner === owner).map((row) => row.item) };
+    const row = table.get(id);
+    if (row ? row.owner !== owner : method === "GET") return problem(404, "not-found", "This is not on your shelf.");
+    if (method === "GET") return { status: 200, body: row?.item };
+    if (method === "DELETE") {
+      table.delete(id);
+      return { status: 204 };
+    }
+    const parsed = schemas[name].safeParse(body);
+    if (!parsed.success)
+      return problem(400, "invalid", "Something is missing.", parsed.error.issues.map((issue) => ({ path: issue.path.join("."), message: issue.message })));
+    const item = parsed.data as Row["item"];
+    const missing = (target: Name, key: string) => typeof item[key] === "string" && this.tables[target].get(item[key])?.owner !== owner;
+    if (missing("voices", "voiceId") || missing("songs", "songId")) return problem(422, "unknown-reference", "This belongs to something you do not have.");
+    table.set(id, { owner, item });
+    return { status: row ? 200 : 201, body: item };
+  }
+}

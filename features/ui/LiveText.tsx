@@ -1,0 +1,30 @@
+import { View } from "react-native";
+import { Text, type TextProps } from "./Text";
+import { webProps, webStyle } from "./webStyle";
+
+export interface LiveTextProps extends TextProps {
+  /** speak at once instead of when there is a pause */
+  urgent?: boolean;
+  /** only for screen readers */
+  hidden?: boolean;
+}
+
+/** Out of sight, not out of hearing. */
+export const hiddenStyle = webStyle({
+  position: "absolute",
+  width: 1,
+  height: 1,
+  margin: -1,
+  overflow: "hidden",
+  clipPath: "inset(50%)",
+  whiteSpace: "nowrap",
+});
+
+/** Words that are spoken when they change: states of the recorder, results. */
+export function LiveText({ urgent = false, hidden = false, children, ...text }: LiveTextProps) {
+  return (
+    <View role={urgent ? "alert" : "status"} aria-live={urgent ? "assertive" : "polite"} {...webProps({ "aria-atomic": true })} style={hidden ? hiddenStyle : null}>
+      <Text {...text}>{children}</Text>
+    </View>
+  );
+}

@@ -1,0 +1,4 @@
+declare module "*.woff2" {
+  const asset: string | { uri: string };
+  export default asset;
+}

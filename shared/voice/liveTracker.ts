@@ -1,0 +1,77 @@
+import { createLagMeter, HOP, WINDOW, type LagFrame } from "../signal/lagFrame";
+import { createResampler } from "../signal/resampler";
+import { findCandidates, type CandidateFrame } from "./pitchCandidates";
+import { createPathFinder } from "./pitchPath";
+import { trackFrame } from "./pitchTrack";
+import { measureRoom, silentRoom, type RoomFloor } from "./roomFloor";
+
+/** Frames of 10 ms the live tracker looks ahead before it decides. */
+export const LOOK_AHEAD_FRAMES = 12;
+const ROOM_MEMORY = 1500;
+const ROOM_EVERY = 25;
+
+/** One frame of the live trail. */
+export interface LiveFrame {
+  /** time in seconds since the first sample pushed */
+  t: number;
+  /** fundamental frequency in Hz; null where unvoiced */
+  hz: number | null;
+  /** 0 to 1 */
+  clarity: number;
+  /** RMS level in dBFS, full-scale sine 0; -Infinity for silence */
+  levelDb: number;
+}
+
+/**
+ * The tracker of `listenToTake`, run while the singer sings. It decides each 10 ms frame 120 ms later
+ * (and needs 33 ms more of sound for the window of a frame), and knows the room only from what it has heard so far,
+ * at most the last 15 s; in all else it is the same.
+ *
+ * @param sampleRate in Hz, 8000 to 192000
+ * @returns push(pcm): mono samples in [-1, 1], any length; gives the frames decided by them, in order, one per 10 ms
+ * @throws RangeError if the rate is outside 8-192 kHz
+ */
+export function createLiveTracker(sampleRate: number): { push(pcm: Float32Array): LiveFrame[] } {
+  const resampler = createResampler(sampleRate);
+  const measure = createLagMeter();
+  const finder = createPathFinder(LOOK_AHEAD_FRAMES + 1);
+  let sound = new Float32Array(WINDOW / 2);
+  let heard: LagFrame[] = [];
+  let room: RoomFloor = silentRoom();
+  let waiting: CandidateFrame[] = [];
+  let measured = 0;
+  let decided = 0;
+
+  function listen(lagFrame: LagFrame): LiveFrame | null {
+    heard.push(lagFrame);
+    if (heard.length > 2 * ROOM_MEMORY) heard = heard.slice(-ROOM_MEMORY);
+    if (measured % ROOM_EVERY === 0) room = measureRoom(heard.slice(-ROOM_MEMORY));
+    measured++;
+    const frame = findCandidates(lagFrame, room);
+    finder.push(frame);
+    waiting.push(frame);
+    const point = finder.decide(LOOK_AHEAD_FRAMES);
+    if (!point) return null;
+    const [oldest, ...rest] = waiting;
+    waiting = rest;
+    const { hz, clarity, levelDb } = trackFrame(oldest!, point.candidate?.hz ?? null, point.candidate?.clarity);
+    return { t: decided++ / 100, hz, clarity, levelDb };
+  }
+
+  return {
+    push(pcm) {
+      const more = resampler.push(pcm);
+      const joined = new Float32Array(sound.length + more.length);
+      joined.set(sound);
+      joined.set(more, sound.length);
+      const out: LiveFrame[] = [];
+      let from = 0;
+      for (; from + WINDOW <= joined.length; from += HOP) {
+        const frame = listen(measure(joined, from));
+        if (frame) out.push(frame);
+      }
+      sound = joined.slice(from);
+      return out;
+    },
+  };
+}

@@ -1,0 +1,42 @@
+import type { HeardNote } from "./sungNotes";
+
+/** A short note farther than this from every other is taken for a tracker's slip or a squeak. */
+export const LONE_DISTANCE_SEMITONES = 5.5;
+const LONE_SHORT_S = 0.6;
+const SOFT_DB = 14;
+const VERY_SOFT_DB = 24;
+const UNCLEAR = 0.85;
+
+/**
+ * Marks the notes that should not count for a range although they were sustained: a lone short one more than
+ * 5.5 semitones from every other, one both soft and unclear (an instrument's bleed, an echo), one very soft.
+ *
+ * @param notes in order of time; not modified
+ * @returns the same notes with `clear` decided
+ */
+export function weedNotes(notes: readonly HeardNote[]): HeardNote[] {
+  const loud = weightedLevel(notes.filter((n) => n.sustained));
+  const believed = notes.map((note) => {
+    const under = loud - note.levelDb;
+    const faint = under > VERY_SOFT_DB || (under > SOFT_DB && note.clarity < UNCLEAR);
+    return { ...note, clear: note.sustained && !faint };
+  });
+  return believed.map((note) => {
+    if (!note.clear || note.heldS >= LONE_SHORT_S) return note;
+    const others = believed.filter((other) => other.clear && other.start !== note.start);
+    const lone = others.length > 0 && others.every((other) => Math.abs(other.midi - note.midi) > LONE_DISTANCE_SEMITONES);
+    return { ...note, clear: !lone };
+  });
+}
+
+/** Level that the louder half of the sung time reaches, in dBFS. */
+function weightedLevel(notes: readonly HeardNote[]): number {
+  const sorted = [...notes].sort((a, b) => b.levelDb - a.levelDb);
+  const whole = sorted.reduce((sum, n) => sum + n.heldS, 0);
+  let seen = 0;
+  for (const note of sorted) {
+    seen += note.heldS;
+    if (seen >= whole / 3) return note.levelDb;
+  }
+  return -Infinity;
+}

@@ -1,0 +1,122 @@
+import { ANALYSIS_RATE } from "../signal/resampler";
+import { MAX_LAG, type LagFrame } from "../signal/lagFrame";
+import type { RoomFloor } from "./roomFloor";
+
+/** Search limits of the tracker in Hz. */
+export const LOWEST_HZ = 60;
+export const HIGHEST_HZ = 1400;
+const MOST_CANDIDATES = 8;
+const LEAST_CLARITY = 0.2;
+
+/** One possible pitch of a frame. */
+export interface PitchCandidate {
+  hz: number;
+  /** fractional MIDI number, A4 = 440 Hz */
+  midi: number;
+  /** normalised square difference at the period after the room was subtracted, at most 1 */
+  clarity: number;
+  /** share of the sound's power in the candidate's odd harmonics, 0 to about 0.5; near 0 tells an octave-down error */
+  oddShare: number;
+}
+
+/** A frame with all its possible pitches and how far it stands out of the room. */
+export interface CandidateFrame {
+  candidates: PitchCandidate[];
+  levelDb: number;
+  /** power of the frame over the room's, in dB; 60 where the room is silent */
+  aboveRoomDb: number;
+}
+
+/**
+ * Finds the possible pitches of one frame: the peaks of its normalised square difference, refined between lags.
+ *
+ * @param frame lag-domain picture of the frame
+ * @param room what the room alone sounds like, subtracted first
+ * @returns up to 8 candidates between 60 and 1400 Hz, shortest period first
+ * @see P. McLeod, G. Wyvill, ICMC 2005; S. Boll, IEEE Trans. ASSP 27(2) 1979 (subtraction of mean noise power)
+ */
+export function findCandidates(frame: LagFrame, room: RoomFloor): CandidateFrame {
+  const power = frame.m[0]!;
+  const roomPower = room.m[0]!;
+  const aboveRoomDb = power <= 0 ? -60 : roomPower <= 0 ? 60 : Math.max(-60, Math.min(60, 10 * Math.log10(power / roomPower)));
+  const out: CandidateFrame = { candidates: [], levelDb: frame.levelDb, aboveRoomDb };
+  if (power <= 0) return out;
+  const n = cleanedDifference(frame, room);
+  const shortest = Math.floor(ANALYSIS_RATE / HIGHEST_HZ);
+  for (let lag = shortest; lag < MAX_LAG - 4; lag++) {
+    const here = n[lag]!;
+    if (here < LEAST_CLARITY - 0.1 || here < n[lag - 1]! || here <= n[lag + 1]!) continue;
+    const [period, clarity] = refine(n, lag);
+    const hz = ANALYSIS_RATE / period;
+    if (clarity < LEAST_CLARITY || hz < LOWEST_HZ || hz > HIGHEST_HZ) continue;
+    const half = valueAt(n, period / 2);
+    out.candidates.push({ hz, midi: 69 + 12 * Math.log2(hz / 440), clarity: Math.min(1, clarity), oddShare: Math.max(0, (clarity - half) / 2) });
+  }
+  if (out.candidates.length > MOST_CANDIDATES) {
+    const floor = out.candidates.map((c) => c.clarity).sort((a, b) => b - a)[MOST_CANDIDATES - 1]!;
+    out.candidates = out.candidates.filter((c) => c.clarity >= floor);
+  }
+  return out;
+}
+
+function cleanedDifference(frame: LagFrame, room: RoomFloor): Float32Array {
+  const n = new Float32Array(MAX_LAG + 1);
+  for (let lag = 0; lag <= MAX_LAG; lag++) {
+    const whole = frame.m[lag]!;
+    const rest = Math.max(whole - room.m[lag]!, 0.2 * whole);
+    n[lag] = rest > 0 ? (2 * (frame.r[lag]! - room.r[lag]!)) / rest : 0;
+  }
+  return n;
+}
+
+/** Peak between lags: band-limited interpolation on a quarter grid, then a parabola. */
+function refine(n: Float32Array, lag: number): [number, number] {
+  let best = lag;
+  let top = n[lag]!;
+  for (const offset of [-0.5, -0.25, 0.25, 0.5]) {
+    const value = valueAt(n, lag + offset);
+    if (value > top) {
+      top = value;
+      best = lag + offset;
+    }
+  }
+  const before = valueAt(n, best - 0.25);
+  const after = valueAt(n, best + 0.25);
+  const bend = before - 2 * top + after;
+  if (bend >= 0) return [best, top];
+  const shift = Math.max(-0.5, Math.min(0.5, (before - after) / (2 * bend)));
+  return [best + 0.25 * shift, top - 0.25 * (before - after) * shift];
+}
+
+const REACH = 5;
+const STEPS = 64;
+const kernels = interpolationKernels();
+
+function valueAt(n: Float32Array, lag: number): number {
+  const scaled = Math.round(lag * STEPS);
+  const whole = Math.floor(scaled / STEPS);
+  const from = (scaled - whole * STEPS) * 2 * REACH;
+  let sum = 0;
+  for (let tap = 0; tap < 2 * REACH; tap++) {
+    const index = Math.abs(whole - REACH + 1 + tap);
+    sum += kernels[from + tap]! * (n[index] ?? 0);
+  }
+  return sum;
+}
+
+function interpolationKernels(): Float32Array {
+  const out = new Float32Array(STEPS * 2 * REACH);
+  for (let step = 0; step < STEPS; step++) {
+    let sum = 0;
+    for (let tap = 0; tap < 2 * REACH; tap++) {
+      const distance = tap - REACH + 1 - step / STEPS;
+      const window = Math.cos((Math.PI * distance) / (2 * REACH)) ** 2;
+      const x = Math.PI * distance;
+      const value = (Math.abs(x) < 1e-9 ? 1 : Math.sin(x) / x) * window;
+      out[step * 2 * REACH + tap] = value;
+      sum += value;
+    }
+    for (let tap = 0; tap < 2 * REACH; tap++) out[step * 2 * REACH + tap]! /= sum;
+  }
+  return out;
+}

@@ -1,5 +1,6 @@
 /** What a string is made of; decides its weight and its limits. */
-export type StringMaterial = "plain-steel" | "nickel-wound" | "phosphor-bronze" | "brass-wound" | "nylon" | "fluorocarbon" | "unknown";
+export type StringMaterial =
+  "plain-steel" | "nickel-wound" | "phosphor-bronze" | "brass-wound" | "nylon" | "fluorocarbon" | "unknown";
 
 /** One string (or course). */
 export interface InstrumentString {

@@ -1,0 +1,45 @@
+import type { Instrument } from "./instrument";
+
+/**
+ * Distance of a fret from the nut.
+ *
+ * @param scale scale length, any unit, > 0
+ * @param semitones equal-tempered semitones above the open string, >= 0
+ * @returns distance in the same unit
+ * @throws RangeError if the scale is not positive or semitones is negative
+ * @see equal temperament: x = L - L / 2^(n/12)
+ * @example fretPosition(25.5, 12) // => 12.75
+ */
+export function fretPosition(scale: number, semitones: number): number {
+  if (!(scale > 0)) throw new RangeError("scale must be a positive length");
+  if (!(semitones >= 0)) throw new RangeError("semitones must not be negative");
+  return scale - scale / 2 ** (semitones / 12);
+}
+
+/**
+ * Distance between two frets, from fret wire to fret wire.
+ *
+ * @param scaleMm scale length in mm, > 0
+ * @param lower semitones of the lower fret above the open string, >= 0
+ * @param higher semitones of the higher fret, >= lower
+ * @returns mm
+ * @throws RangeError if the frets are in the wrong order
+ * @example Math.round(fretSpanMm(647.7, 1, 4) * 10) / 10 // => 97.3
+ */
+export function fretSpanMm(scaleMm: number, lower: number, higher: number): number {
+  if (higher < lower) throw new RangeError("the higher fret comes second");
+  return fretPosition(scaleMm, higher) - fretPosition(scaleMm, lower);
+}
+
+/**
+ * Semitones that a fret raises the open string.
+ *
+ * @param instrument for its fret map, if it has one
+ * @param fret 0 = open
+ * @returns semitones, or null where the fretboard has no such fret
+ */
+export function fretSemitones(instrument: Pick<Instrument, "frets" | "fretMap">, fret: number): number | null {
+  if (fret === 0) return 0;
+  if (fret < 0 || fret > instrument.frets) return null;
+  return instrument.fretMap ? (instrument.fretMap[fret - 1] ?? null) : fret;
+}

@@ -1,0 +1,197 @@
+import { midiToHz, noteName, parseNoteName } from "../music/pitch";
+import type { Instrument, InstrumentString, StringMaterial } from "./instrument";
+import { unitWeight } from "./unitWeights";
+
+/** Gravity in inches per second squared, as the string makers' formula has it. */
+const gravityIn = 386.4;
+const mmPerInch = 25.4;
+/** Density of steel music wire in lb per cubic inch. */
+const steelDensity = 0.282;
+
+/** Below this share of its own ordinary tension a string flaps and frets sharp. */
+const slackBelow = 0.72;
+/** A plain steel string is taken to no more than this share of the weakest wire's strength. */
+const plainCap = 0.75;
+/** Semitones above the note a string was made for that are never advised for it. */
+const neverUpBy = 2;
+
+/** Least tensile strength of music wire, in thousand pounds per square inch, by gauge in thousandths of an inch. */
+const leastStrengthKsi: readonly (readonly [thousandths: number, ksi: number])[] = [
+  [7, 407],
+  [8, 399],
+  [9, 393],
+  [10, 387],
+  [11, 382],
+  [12, 377],
+  [13, 373],
+  [14, 369],
+  [15, 365],
+  [16, 362],
+  [18, 356],
+  [20, 350],
+  [22, 345],
+  [24, 341],
+  [26, 337],
+];
+
+/** What a retune does to one string. */
+export type RetuneVerdict = "fine" | "slack" | "tight" | "unsafe";
+
+/** One string before and after, with its verdict. */
+export interface TensionChange {
+  string: string;
+  to: string;
+  gaugeIn: number | null;
+  /** pounds-force; null where gauge or material is not known */
+  beforeLb: number | null;
+  afterLb: number | null;
+  verdict: RetuneVerdict;
+}
+
+/**
+ * Tension of a string.
+ *
+ * @param unitWeightLbPerIn weight of one inch of string in lb, > 0
+ * @param scaleIn sounding length in inches, > 0
+ * @param hz frequency it is tuned to, > 0
+ * @returns pounds-force
+ * @throws RangeError if an argument is not positive
+ * @see D'Addario, string tension guide: T = UW (2 L F)^2 / 386.4
+ * @example Math.round(stringTensionLb(0.0000319, 25.5, 329.628) * 10) / 10 // => 23.3
+ */
+export function stringTensionLb(unitWeightLbPerIn: number, scaleIn: number, hz: number): number {
+  if (!(unitWeightLbPerIn > 0) || !(scaleIn > 0) || !(hz > 0))
+    throw new RangeError("weight, scale and hz must be positive");
+  return (unitWeightLbPerIn * (2 * scaleIn * hz) ** 2) / gravityIn;
+}
+
+/**
+ * How tension changes with pitch, whatever the string.
+ *
+ * @param semitones shift, negative for down
+ * @returns factor of the tension
+ * @example tensionRatio(-6) // => 0.5
+ */
+export function tensionRatio(semitones: number): number {
+  return 2 ** (semitones / 6);
+}
+
+/**
+ * Load at which the weakest allowed music wire of a gauge breaks.
+ *
+ * @param gaugeIn diameter in inches, > 0
+ * @returns pounds-force; outside 0.007 to 0.026 in the strength of the nearest gauge is taken
+ * @throws RangeError if the gauge is not positive
+ * @see ASTM A228/A228M, Steel Wire, Music Spring Quality: minimum tensile strength
+ * @example Math.round(breakingLoadLb(0.01) * 10) / 10 // => 30.4
+ */
+export function breakingLoadLb(gaugeIn: number): number {
+  return strengthPsi(gaugeIn) * Math.PI * (gaugeIn / 2) ** 2;
+}
+
+/**
+ * Pitch at which the weakest allowed music wire snaps; to first order independent of its gauge.
+ *
+ * @param gaugeIn diameter in inches, > 0
+ * @param scaleIn sounding length in inches, > 0
+ * @returns frequency in Hz
+ * @throws RangeError if an argument is not positive
+ * @see ASTM A228/A228M; F = sqrt(386.4 s / d) / (2 L)
+ * @example Math.round(breakingHz(0.01, 25.5)) // => 451
+ */
+export function breakingHz(gaugeIn: number, scaleIn: number): number {
+  if (!(scaleIn > 0)) throw new RangeError("scaleIn must be a positive length in inches");
+  return Math.sqrt((gravityIn * strengthPsi(gaugeIn)) / steelDensity) / (2 * scaleIn);
+}
+
+/**
+ * Judges one string at another pitch. Down: slack below 72 % of its ordinary tension. Up: one semitone is tight, more
+ * is unsafe for wound strings and for those whose gauge is not known; a plain steel string may go up to 75 % of the
+ * strength of the weakest wire.
+ *
+ * @param string as it is tuned now, taken to be the note its set was made for
+ * @param scaleMm scale length of the instrument in mm
+ * @param semitones shift, whole, negative for down
+ * @returns verdict; "unsafe" must never be proposed
+ * @throws RangeError if the string has no readable note
+ * @see common practice for the slack floor and the upper limits; ASTM A228/A228M for the strength of plain steel
+ */
+export function retuneVerdict(string: InstrumentString, scaleMm: number, semitones: number): RetuneVerdict {
+  if (semitones > 0) {
+    const load = plainLoad(string, scaleMm, semitones);
+    if (load === null) return semitones >= neverUpBy ? "unsafe" : "tight";
+    return load > plainCap ? "unsafe" : "tight";
+  }
+  return tensionRatio(semitones) < slackBelow ? "slack" : "fine";
+}
+
+/**
+ * Tensions of all strings before and after a retune.
+ *
+ * @param instrument in its present tuning
+ * @param semitones shift of all strings alike, whole, negative for down
+ * @returns one entry a string, in playing order
+ * @throws RangeError if a string has no readable note or semitones is not whole
+ */
+export function tensionChanges(instrument: Instrument, semitones: number): TensionChange[] {
+  if (!Number.isInteger(semitones)) throw new RangeError("semitones must be whole");
+  return instrument.strings.map((string) => {
+    const midi = stringMidi(string);
+    const spelling = string.note.includes("b") ? "flats" : "sharps";
+    return {
+      string: string.note,
+      to: semitones === 0 ? string.note : noteName(midi + semitones, spelling),
+      gaugeIn: string.gaugeIn,
+      beforeLb: tensionAt(string, instrument.scaleMm, midi),
+      afterLb: tensionAt(string, instrument.scaleMm, midi + semitones),
+      verdict: retuneVerdict(string, instrument.scaleMm, semitones),
+    };
+  });
+}
+
+/**
+ * MIDI number of an open string.
+ *
+ * @param string with a note such as "F#4"
+ * @returns MIDI note number
+ * @throws RangeError if the note cannot be read
+ */
+export function stringMidi(string: Pick<InstrumentString, "note">): number {
+  const midi = parseNoteName(string.note);
+  if (midi === null) throw new RangeError(`"${string.note}" is no note with an octave`);
+  return midi;
+}
+
+/**
+ * Whether a string is wound round a core, which carries its load and whose thickness no maker prints.
+ *
+ * @param material what the string is made of
+ * @returns true for wound strings
+ */
+export function isWound(material: StringMaterial): boolean {
+  return material === "nickel-wound" || material === "phosphor-bronze" || material === "brass-wound";
+}
+
+function tensionAt(string: InstrumentString, scaleMm: number, midi: number): number | null {
+  if (string.gaugeIn === null) return null;
+  const weight = unitWeight(string.material, string.gaugeIn);
+  return weight === null ? null : stringTensionLb(weight, (string.scaleMm ?? scaleMm) / mmPerInch, midiToHz(midi));
+}
+
+/** Share of the weakest wire's strength that a plain steel string would bear; null for all others. */
+function plainLoad(string: InstrumentString, scaleMm: number, semitones: number): number | null {
+  if (string.material !== "plain-steel" || string.gaugeIn === null) return null;
+  const hz = midiToHz(stringMidi(string) + semitones);
+  return (hz / breakingHz(string.gaugeIn, (string.scaleMm ?? scaleMm) / mmPerInch)) ** 2;
+}
+
+function strengthPsi(gaugeIn: number): number {
+  if (!(gaugeIn > 0)) throw new RangeError("gaugeIn must be a positive diameter in inches");
+  const thousandths = gaugeIn * 1000;
+  const above = leastStrengthKsi.findIndex(([gauge]) => gauge >= thousandths - 1e-9);
+  const upper = leastStrengthKsi[above] ?? leastStrengthKsi[leastStrengthKsi.length - 1]!;
+  const lower = leastStrengthKsi[above - 1];
+  if (!lower || above < 0) return upper[1] * 1000;
+  const part = Math.min(1, (thousandths - lower[0]) / (upper[0] - lower[0]));
+  return (lower[1] + (upper[1] - lower[1]) * part) * 1000;
+}

@@ -1,0 +1,106 @@
+import type { KeyParts, SingingVoice } from "./keyScore";
+import type { TunePitch } from "./tunePicture";
+
+/** Most points of each part; together 100. */
+export const partMaxima: Readonly<KeyParts> = { comfort: 50, roomAbove: 15, roomBelow: 10, longHigh: 10, lowCarry: 15 };
+
+/**
+ * Points of each part that a key keeps merely by lying inside the range; the rest is earned. A key beyond the range
+ * has only these to lose from, so it can never reach the score of a key without a note beyond.
+ */
+const sure: Readonly<KeyParts> = { comfort: 20, roomAbove: 6, roomBelow: 4, longHigh: 4, lowCarry: 6 };
+
+/** Room above that is as good as any more, in semitones; a reserve of 2 to 3 is the usual default. */
+const roomAboveEnough = 4;
+/** Room below that is as good as any more, in semitones; a reserve of 1 to 2 is the usual default. */
+const roomBelowEnough = 3;
+
+/** A voice with its edges on whole semitones, as they are named to people. */
+export interface VoiceEdges {
+  rangeLow: number;
+  rangeHigh: number;
+  comfortLow: number;
+  comfortHigh: number;
+}
+
+/**
+ * The edges of a voice on the semitones that a person reads, so that picture and score agree: a band from 54.6 to 70.3
+ * is called G3 to Bb4 and judged as G3 to Bb4.
+ *
+ * @param voice range and comfort band, fractional MIDI numbers, comfort inside range
+ * @returns whole MIDI numbers
+ * @throws RangeError if an edge is missing, a band is upside down, or comfort leaves the range
+ */
+export function voiceEdges(voice: SingingVoice): VoiceEdges {
+  const { range, comfort } = voice;
+  const edges = [range.lowMidi, comfort.lowMidi, comfort.highMidi, range.highMidi];
+  const inOrder = edges.every((edge, k) => Number.isFinite(edge) && (k === 0 || edges[k - 1]! <= edge));
+  if (!inOrder) throw new RangeError("a voice needs a comfort band inside its range, both from low to high");
+  return {
+    rangeLow: Math.round(range.lowMidi),
+    comfortLow: Math.round(comfort.lowMidi),
+    comfortHigh: Math.round(comfort.highMidi),
+    rangeHigh: Math.round(range.highMidi),
+  };
+}
+
+/**
+ * The five parts of a key's score, whole points. Strain above costs, part by part, at least what weakness the same
+ * distance below costs; widening range or comfort band lowers no part.
+ *
+ * @param pitches the tune in this key
+ * @param edges the voice
+ * @returns points; their sum is the score
+ * @see common practice: penalise high notes by the time spent there, keep 2-3 semitones above and 1-2 below (defaults)
+ */
+export function keyParts(pitches: readonly TunePitch[], edges: VoiceEdges): KeyParts {
+  const low = pitches[0]!.midi;
+  const high = pitches[pitches.length - 1]!.midi;
+  const beyond = low < edges.rangeLow || high > edges.rangeHigh;
+  const losses: KeyParts = {
+    comfort: capped(total(pitches, ({ midi, share }) => share * discomfort(midi, edges))),
+    roomAbove: capped((roomAboveEnough - (edges.rangeHigh - high)) / roomAboveEnough),
+    roomBelow: capped((roomBelowEnough - (low - edges.rangeLow)) / roomBelowEnough),
+    longHigh: capped(12 * total(pitches, ({ midi, heldShare }) => heldShare * ramp(midi - edges.comfortHigh + 3))),
+    // At most two thirds, so that in points it stays below what the same distance above costs.
+    lowCarry: (2 / 3) * capped(4.5 * total(pitches, ({ midi, share }) => share * ramp(edges.comfortLow + 3 - midi))),
+  };
+  // Losing all that is sure takes a note beyond; roomAbove or roomBelow is then lost in full.
+  const points = (part: keyof KeyParts) => {
+    const base = sure[part];
+    const earned = partMaxima[part] - base;
+    return beyond ? base - whole(base * losses[part]) : base + earned - whole(earned * losses[part]);
+  };
+  return {
+    comfort: points("comfort"),
+    roomAbove: points("roomAbove"),
+    roomBelow: points("roomBelow"),
+    longHigh: points("longHigh"),
+    lowCarry: points("lowCarry"),
+  };
+}
+
+/** How far from sitting well a pitch is: 0 in the band, 2 and growing above it, less below. */
+function discomfort(midi: number, edges: VoiceEdges): number {
+  if (midi > edges.comfortHigh) return 1.6 + 0.4 * (midi - edges.comfortHigh);
+  if (midi < edges.comfortLow) return 1.2 + 0.3 * (edges.comfortLow - midi);
+  return 0;
+}
+
+/** 0 three semitones inside the edge, one half on it, 1 three semitones outside. */
+function ramp(semitones: number): number {
+  return capped(semitones / 6);
+}
+
+function capped(value: number): number {
+  return Math.min(1, Math.max(0, value));
+}
+
+function total(pitches: readonly TunePitch[], cost: (pitch: TunePitch) => number): number {
+  return pitches.reduce((sum, pitch) => sum + cost(pitch), 0);
+}
+
+/** Rounds to whole points after dropping the last digits, in which two equal tunes may differ. */
+function whole(points: number): number {
+  return Math.round(Math.round(points * 1e9) / 1e9);
+}

@@ -1,0 +1,136 @@
+import { glyphs, noteName, type Spelling } from "../music/pitch";
+import type { KeyMark, KeyParts } from "./keyScore";
+import { partMaxima, type VoiceEdges } from "./keyParts";
+
+/** What the sentence about a key is made from. */
+export interface KeyFacts {
+  marks: readonly KeyMark[];
+  parts: KeyParts;
+  beyond: boolean;
+  coarse: boolean;
+  spelling: Spelling;
+}
+
+/** Up to this share of the sung time a note is called brief. */
+const briefUpTo = 0.05;
+
+/**
+ * The largest reason for a key's score, one sentence for people.
+ *
+ * @param facts marks, parts and spelling of the key
+ * @param edges the voice
+ * @returns plain sentence with glyphs: which notes, how far, how long
+ */
+export function keyReason(facts: KeyFacts, edges: VoiceEdges): string {
+  const sentence = facts.beyond ? beyondSentence(facts, edges) : insideSentence(facts, edges);
+  return facts.coarse ? `${sentence} Judged by the span alone.` : sentence;
+}
+
+function beyondSentence({ marks, spelling, coarse }: KeyFacts, edges: VoiceEdges): string {
+  const above = marks.filter(({ midi }) => midi > edges.rangeHigh);
+  const below = marks.filter(({ midi }) => midi < edges.rangeLow);
+  const clause = (beyond: readonly KeyMark[], where: string) =>
+    `lies ${where} your range (${noteList(beyond, spelling)})`;
+  if (coarse) {
+    const sides = [above.length > 0 ? clause(above, "above") : "", below.length > 0 ? clause(below, "below") : ""];
+    return `Part of the tune ${sides.filter(Boolean).join(" and part ")}.`;
+  }
+  const parts = [
+    ...(above.length > 0 ? [[above, "above"] as const] : []),
+    ...(below.length > 0 ? [[below, "below"] as const] : []),
+  ].sort(([a], [b]) => shareOf(b) - shareOf(a));
+  const [first, second] = parts;
+  const opening = `${percent(shareOf(first![0]))} of the tune ${clause(first![0], first![1])}`;
+  return second ? `${opening}, ${percent(shareOf(second[0]))} ${clause(second[0], second[1])}.` : `${opening}.`;
+}
+
+function insideSentence({ marks, parts, spelling, coarse }: KeyFacts, edges: VoiceEdges): string {
+  const over = marks.filter(({ midi }) => midi > edges.comfortHigh);
+  const under = marks.filter(({ midi }) => midi < edges.comfortLow);
+  if (over.length === 0 && under.length === 0) return comfortSentence(parts, marks, edges);
+  // Strain above decides before weakness below.
+  const side = shareOf(over) * 1.3 >= shareOf(under) ? over : under;
+  const up = side === over;
+  const furthest = up ? side[side.length - 1]! : side[0]!;
+  const note = glyphs(noteName(furthest.midi, spelling));
+  const distance = stepsInWords(up ? furthest.midi - edges.comfortHigh : edges.comfortLow - furthest.midi);
+  const last = furthest.midi === (up ? edges.rangeHigh : edges.rangeLow);
+  const lastWords = up ? `${note} is the highest note you have` : `${note} is the lowest note you have`;
+  const place = up ? "over" : "under";
+  if (side.length === 1) {
+    const brief = !coarse && furthest.share <= briefUpTo ? ", briefly" : "";
+    return last
+      ? `${lastWords}, ${distance} ${place} your band.`
+      : `${note} is ${distance} ${place} your band${brief}.`;
+  }
+  const amount = coarse ? "Part" : percent(shareOf(side));
+  const reach = `${amount} of the tune lies ${place} your comfort band`;
+  return last ? `${reach}, and ${lastWords}.` : `${reach}, ${up ? "up" : "down"} to ${note}.`;
+}
+
+function comfortSentence(parts: KeyParts, marks: readonly KeyMark[], edges: VoiceEdges): string {
+  const lost = (part: keyof KeyParts) => partMaxima[part] - parts[part];
+  const most = Math.max(lost("longHigh"), lost("lowCarry"), lost("roomAbove"), lost("roomBelow"));
+  if (most <= 2) return "All of it sits in your comfort band.";
+  if (lost("roomAbove") === most) {
+    const room = edges.rangeHigh - marks[marks.length - 1]!.midi;
+    return `All of it sits in your comfort band, with ${room === 0 ? "no room" : `only ${semitones(room)}`} above.`;
+  }
+  if (lost("longHigh") === most) return "All of it is comfortable; long notes lie at the top edge of your band.";
+  if (lost("lowCarry") === most)
+    return "All of it is comfortable; much of it lies at the bottom edge, where it carries less.";
+  const room = marks[0]!.midi - edges.rangeLow;
+  return `All of it sits in your comfort band, with ${room === 0 ? "no room" : `only ${semitones(room)}`} below.`;
+}
+
+/**
+ * A share of the tune in words.
+ *
+ * @param share 0 to 1
+ * @returns whole percent, never "0 %" for something that is there
+ * @example percent(0.071) // => "7 %"
+ */
+export function percent(share: number): string {
+  const whole = Math.round(share * 100);
+  return share > 0 && whole === 0 ? "Under 1 %" : `${whole} %`;
+}
+
+/**
+ * A distance in words, as one says it to a singer.
+ *
+ * @param steps whole semitones, 1 or more
+ * @returns with its article
+ * @example stepsInWords(2) // => "a whole tone"
+ */
+export function stepsInWords(steps: number): string {
+  if (steps === 1) return "a semitone";
+  return steps === 2 ? "a whole tone" : semitones(steps);
+}
+
+function semitones(count: number): string {
+  const words = [
+    "no",
+    "one",
+    "two",
+    "three",
+    "four",
+    "five",
+    "six",
+    "seven",
+    "eight",
+    "nine",
+    "ten",
+    "eleven",
+    "twelve",
+  ];
+  return `${words[count] ?? count} semitone${count === 1 ? "" : "s"}`;
+}
+
+function shareOf(marks: readonly KeyMark[]): number {
+  return marks.reduce((sum, { share }) => sum + share, 0);
+}
+
+function noteList(marks: readonly KeyMark[], spelling: Spelling): string {
+  const names = marks.map(({ midi }) => glyphs(noteName(midi, spelling)));
+  return names.length <= 2 ? names.join(" and ") : `${names[0]} to ${names[names.length - 1]}`;
+}

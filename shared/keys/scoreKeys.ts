@@ -1,0 +1,154 @@
+import { keyFifths, spellTonic, tonicPitchClass, type Mode } from "../music/keyName";
+import { pitchClass } from "../music/pitch";
+import { keyParts, voiceEdges, type VoiceEdges } from "./keyParts";
+import { keyReason } from "./keyReason";
+import type { KeyMark, KeyScore, SingingVoice, Tune } from "./keyScore";
+import { tunePitches, type TunePitch } from "./tunePicture";
+
+/** How one sung pitch felt to the singer afterwards. */
+export interface EffortEvidence {
+  midi: number;
+  /** 1 (no effort) to 5 (very hard) */
+  effort: number;
+}
+
+/** What else is known besides tune and voice. */
+export interface KeyOptions {
+  /** decides how the tonics are spelled; default major */
+  mode?: Mode;
+  /** tonic the song stands in now, ASCII, for breaking ties; default the tune's home */
+  presentKey?: string;
+  /** takes rated afterwards; those felt as hard (4 or 5) narrow the comfort band */
+  evidence?: readonly EffortEvidence[];
+}
+
+/** From this effort on a pitch was hard to sing. */
+const hardFrom = 4;
+/** A voice may be written this many octaves away from where it sings. */
+const octavesAway = 5;
+
+/**
+ * Judges all twelve keys for one voice, each in the octave where it sits best.
+ *
+ * A score is the sum of five parts in whole points. A key with a note outside the range keeps at most 36 points, any
+ * other has at least 43, so it ranks under every key without.
+ *
+ * @param tune notes with durations in quarter notes, or the span alone (coarser, and says so)
+ * @param voice range and comfort band, fractional MIDI numbers
+ * @param options mode, present key, and takes rated by effort
+ * @returns twelve keys, best first; ties by fewest accidentals, then by closeness to the present key
+ * @throws RangeError if the tune is empty, a band is upside down or a tonic is no note name
+ * @see C. Herbst et al., Int. J. Research in Choral Singing 4(1), 2012: upper and lower reserve, tessitura shift (LR - UR)/2
+ */
+export function scoreKeys(tune: Tune, voice: SingingVoice, options: KeyOptions = {}): KeyScore[] {
+  const mode = options.mode ?? "major";
+  const home = tonicPitchClass(tune.home);
+  const present = tonicPitchClass(options.presentKey ?? tune.home);
+  const edges = narrowed(voiceEdges(voice), options.evidence ?? []);
+  const pitches = tunePitches(tune);
+  const coarse = tune.kind === "span";
+  const keys = Array.from({ length: 12 }, (_, pc) => bestOctave(pitches, edges, home, pc, mode, coarse));
+  const accidentals = (key: KeyScore) => Math.abs(keyFifths({ tonic: key.tonic, mode }));
+  const distance = (key: KeyScore) => Math.abs(nearestMove(present, tonicPitchClass(key.tonic)));
+  return keys.sort(
+    (a, b) =>
+      Number(a.beyond) - Number(b.beyond) ||
+      b.score - a.score ||
+      accidentals(a) - accidentals(b) ||
+      distance(a) - distance(b) ||
+      tonicPitchClass(a.tonic) - tonicPitchClass(b.tonic),
+  );
+}
+
+/**
+ * Shortest move from one tonic to another.
+ *
+ * @param from pitch class
+ * @param to pitch class
+ * @returns semitones, -5 to 6
+ * @example nearestMove(7, 0) // => 5
+ */
+export function nearestMove(from: number, to: number): number {
+  const up = (((to - from) % 12) + 12) % 12;
+  return up > 6 ? up - 12 : up;
+}
+
+function bestOctave(
+  pitches: readonly TunePitch[],
+  edges: VoiceEdges,
+  home: number,
+  tonicPc: number,
+  mode: Mode,
+  coarse: boolean,
+): KeyScore {
+  const near = nearestMove(home, tonicPc);
+  const choices = Array.from({ length: 2 * octavesAway + 1 }, (_, k) => {
+    const octave = k - octavesAway;
+    const shift = near + 12 * octave;
+    const moved = pitches.map((pitch) => ({ ...pitch, midi: pitch.midi + shift }));
+    const parts = keyParts(moved, edges);
+    const score = parts.comfort + parts.roomAbove + parts.roomBelow + parts.longHigh + parts.lowCarry;
+    return { octave, shift, moved, parts, score, reserves: reserves(moved, edges) };
+  });
+  const best = choices.reduce((a, b) => (compareOctaves(a, b) <= 0 ? a : b));
+  const { octave, shift, moved, parts, score } = best;
+  const tonic = spellTonic(tonicPc, mode);
+  const marks = moved.map(({ midi, share }): KeyMark => {
+    return { midi, share, zone: zoneOf(midi, edges), home: pitchClass(midi) === tonicPc };
+  });
+  const beyond = marks.some(({ zone }) => zone === "beyond");
+  const spelling = keyFifths({ tonic, mode }) < 0 ? "flats" : "sharps";
+  return {
+    tonic,
+    octave,
+    shift,
+    lowMidi: moved[0]!.midi,
+    highMidi: moved[moved.length - 1]!.midi,
+    score,
+    parts,
+    beyond,
+    reserves: best.reserves,
+    marks,
+    reason: keyReason({ marks, parts, beyond, coarse, spelling }, edges),
+    coarse,
+  };
+}
+
+interface OctaveChoice {
+  score: number;
+  shift: number;
+  reserves: KeyScore["reserves"];
+}
+
+/** Better score first, then the better centred, then the smaller move. */
+function compareOctaves(a: OctaveChoice, b: OctaveChoice): number {
+  return (
+    b.score - a.score ||
+    Math.abs(a.reserves.tessituraShift) - Math.abs(b.reserves.tessituraShift) ||
+    Math.abs(a.shift) - Math.abs(b.shift) ||
+    a.shift - b.shift
+  );
+}
+
+function reserves(pitches: readonly TunePitch[], edges: VoiceEdges): KeyScore["reserves"] {
+  const upper = edges.rangeHigh - pitches[pitches.length - 1]!.midi;
+  const lower = pitches[0]!.midi - edges.rangeLow;
+  return { upper, lower, tessituraShift: (lower - upper) / 2 };
+}
+
+function zoneOf(midi: number, edges: VoiceEdges): KeyMark["zone"] {
+  if (midi < edges.rangeLow || midi > edges.rangeHigh) return "beyond";
+  return midi < edges.comfortLow || midi > edges.comfortHigh ? "reach" : "comfort";
+}
+
+/** Pulls the comfort band in, away from pitches that felt hard; narrowing a band never raises a score. */
+function narrowed(edges: VoiceEdges, evidence: readonly EffortEvidence[]): VoiceEdges {
+  const middle = (edges.comfortLow + edges.comfortHigh) / 2;
+  const hard = evidence.filter(({ effort }) => effort >= hardFrom).map(({ midi }) => Math.round(midi));
+  const tops = hard.filter((midi) => midi > middle).map((midi) => Math.max(midi - 1, Math.floor(middle)));
+  const bottoms = hard.filter((midi) => midi <= middle).map((midi) => Math.min(midi + 1, Math.ceil(middle)));
+  const comfortHigh = Math.min(edges.comfortHigh, ...tops);
+  const comfortLow = Math.max(edges.comfortLow, ...bottoms);
+  // With both halves hard one semitone in the middle is left.
+  return { ...edges, comfortHigh: Math.max(comfortHigh, comfortLow), comfortLow };
+}

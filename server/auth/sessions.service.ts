@@ -1,0 +1,88 @@
+import { createHash, randomBytes } from "node:crypto";
+import type { DataSource } from "typeorm";
+import { noSession } from "../http/httpProblem";
+
+export const sessionLifeS = 30 * 24 * 3600;
+
+/** Two tabs may send the same token at once; within these seconds the second is no thief. */
+const graceS = 10;
+
+interface Held {
+  session_id: string;
+  user_id: string;
+}
+
+const hashOf = (token: string) => createHash("sha256").update(token).digest();
+
+/** Sessions are families of refresh tokens, each of which may be used once. Only hashes are stored. */
+export class SessionsService {
+  constructor(private readonly dataSource: DataSource) {}
+
+  /** Begins a session; returns its first refresh token. */
+  async begin(userId: string): Promise<string> {
+    await this.dataSource.query("DELETE FROM sessions WHERE user_id = $1 AND expires_at < now()", [userId]);
+    const rows: { id: string }[] = await this.dataSource.query(
+      "INSERT INTO sessions (user_id, expires_at) VALUES ($1, now() + make_interval(secs => $2)) RETURNING id",
+      [userId, sessionLifeS],
+    );
+    return this.issue(rows[0]?.id ?? "");
+  }
+
+  /** Takes a refresh token and gives the next. A token that comes back later was copied: its whole session ends. */
+  async rotate(token: string): Promise<{ userId: string; token: string }> {
+    const [taken]: [Held[], number] = await this.dataSource.query(
+      `UPDATE refresh_tokens t SET used_at = now() FROM sessions s
+       WHERE t.token_hash = $1 AND t.used_at IS NULL
+         AND s.id = t.session_id AND s.revoked_at IS NULL AND s.expires_at > now()
+       RETURNING s.id AS session_id, s.user_id`,
+      [hashOf(token)],
+    );
+    const held = taken[0] ?? (await this.heldInGrace(token));
+    if (!held) {
+      await this.revokeIfReused(token);
+      throw noSession("Your session has ended. Sign in again.");
+    }
+    await this.dataSource.query(
+      `WITH forgotten AS (DELETE FROM refresh_tokens WHERE session_id = $1 AND used_at < now() - interval '7 days')
+       UPDATE sessions SET expires_at = now() + make_interval(secs => $2) WHERE id = $1`,
+      [held.session_id, sessionLifeS],
+    );
+    return { userId: held.user_id, token: await this.issue(held.session_id) };
+  }
+
+  /** Ends the session a token belongs to, whether or not the token was used. */
+  async end(token: string): Promise<void> {
+    await this.dataSource.query(
+      `UPDATE sessions SET revoked_at = now() FROM refresh_tokens t
+       WHERE t.token_hash = $1 AND t.session_id = sessions.id AND sessions.revoked_at IS NULL`,
+      [hashOf(token)],
+    );
+  }
+
+  private async heldInGrace(token: string): Promise<Held | undefined> {
+    const rows: Held[] = await this.dataSource.query(
+      `SELECT s.id AS session_id, s.user_id FROM refresh_tokens t JOIN sessions s ON s.id = t.session_id
+       WHERE t.token_hash = $1 AND t.used_at > now() - make_interval(secs => $2)
+         AND s.revoked_at IS NULL AND s.expires_at > now()`,
+      [hashOf(token), graceS],
+    );
+    return rows[0];
+  }
+
+  private async revokeIfReused(token: string): Promise<void> {
+    await this.dataSource.query(
+      `UPDATE sessions SET revoked_at = now() FROM refresh_tokens t
+       WHERE t.token_hash = $1 AND t.used_at IS NOT NULL AND t.session_id = sessions.id AND sessions.revoked_at IS NULL`,
+      [hashOf(token)],
+    );
+  }
+
+  private async issue(sessionId: string): Promise<string> {
+    const token = randomBytes(32).toString("base64url");
+    await this.dataSource.query("INSERT INTO refresh_tokens (token_hash, session_id) VALUES ($1, $2)", [
+      hashOf(token),
+      sessionId,
+    ]);
+    return token;
+  }
+}

@@ -1,0 +1,55 @@
+import compression from "compression";
+import cookieParser from "cookie-parser";
+import express, { type Express } from "express";
+import type { Logger } from "pino";
+import type { DataSource } from "typeorm";
+import { authenticate } from "./auth/accessToken";
+import { authRoutes } from "./auth/auth.router";
+import type { Env } from "./env";
+import { Api } from "./http/api";
+import { clientFiles } from "./http/clientFiles";
+import { descriptionRoutes } from "./http/description.router";
+import { errorHandler, unknownRoute } from "./http/errorHandler";
+import { healthRoutes } from "./http/health.router";
+import { requestLog } from "./http/requestLog";
+import { securityHeaders } from "./http/securityHeaders";
+import { instrumentsRoutes } from "./instruments/instruments.router";
+import { decisionsRoutes } from "./keys/decisions.router";
+import { songsRoutes } from "./songs/songs.router";
+import { voicesRoutes } from "./voices/voices.router";
+
+type AppSettings = Pick<Env, "tokenSecret" | "publicOrigin" | "trustProxy" | "staticDir">;
+
+/** Puts the server together; the only place that knows all its parts. */
+export function createApp(dataSource: DataSource, logger: Logger, settings: AppSettings): { app: Express; api: Api } {
+  const app = express();
+  app.disable("x-powered-by");
+  app.set("trust proxy", settings.trustProxy);
+  app.use(requestLog(logger));
+  app.use(securityHeaders(settings.publicOrigin?.startsWith("https:") ?? false));
+
+  const api = new Api(authenticate(settings.tokenSecret));
+  authRoutes(api, dataSource, settings);
+  voicesRoutes(api, dataSource);
+  songsRoutes(api, dataSource);
+  decisionsRoutes(api, dataSource);
+  instrumentsRoutes(api, dataSource);
+  healthRoutes(api, dataSource);
+  descriptionRoutes(api);
+
+  app.use(
+    "/api",
+    (_req, res, next) => {
+      res.set("Cache-Control", "no-store");
+      next();
+    },
+    compression(),
+    express.json({ limit: "2mb" }),
+    cookieParser(),
+    api.router,
+    unknownRoute,
+  );
+  app.use(clientFiles(settings.staticDir));
+  app.use(errorHandler);
+  return { app, api };
+}

@@ -1,0 +1,52 @@
+import "reflect-metadata";
+import { DataSource, type DataSourceOptions } from "typeorm";
+import { UserEntity } from "../auth/user.entity";
+import { InstrumentEntity } from "../instruments/instrument.entity";
+import { DecisionEntity } from "../keys/decision.entity";
+import { SongEntity } from "../songs/song.entity";
+import { TakeEntity } from "../voices/take.entity";
+import { VoiceEntity } from "../voices/voice.entity";
+import { FirstTables1764547200000 } from "./migrations/FirstTables1764547200000";
+
+const common: Pick<
+  Extract<DataSourceOptions, { type: "postgres" }>,
+  "type" | "entities" | "synchronize" | "uuidExtension" | "installExtensions" | "invalidWhereValuesBehavior"
+> = {
+  type: "postgres",
+  entities: [UserEntity, VoiceEntity, TakeEntity, SongEntity, DecisionEntity, InstrumentEntity],
+  synchronize: false,
+  uuidExtension: "pgcrypto",
+  installExtensions: false,
+  // A condition that vanishes because its value is missing would show one person another's rows.
+  invalidWhereValuesBehavior: { null: "throw", undefined: "throw" },
+};
+
+/** The pool that serves requests. `onIdleError` hears of connections lost while idle, which else would end the process. */
+export function createDataSource(url: string, onIdleError: (error: Error) => void): DataSource {
+  return new DataSource({
+    ...common,
+    url,
+    poolSize: 10,
+    connectTimeoutMS: 3000,
+    poolErrorHandler: onIdleError,
+    extra: {
+      keepAlive: true,
+      statement_timeout: 5000,
+      query_timeout: 6000,
+      idle_in_transaction_session_timeout: 10_000,
+    },
+  });
+}
+
+/** One connection without time limits, for migrations. */
+export function createMigrationSource(url: string): DataSource {
+  return new DataSource({
+    ...common,
+    url,
+    poolSize: 1,
+    connectTimeoutMS: 3000,
+    poolErrorHandler: () => undefined,
+    migrations: [FirstTables1764547200000],
+    migrationsTransactionMode: "all",
+  });
+}

@@ -1,0 +1,23 @@
+/** The addresses that the web client knows; every other page answers 404. ":id" stands for one segment. */
+export const clientRoutes = [
+  "/",
+  "/voice",
+  "/voice/sing",
+  "/voice/by-hand",
+  "/songs",
+  "/songs/new",
+  "/songs/:id",
+  "/songs/:id/edit",
+  "/songs/:id/keys",
+  "/songs/:id/ways",
+  "/instruments",
+  "/account",
+  "/account/sign-in",
+  "/account/sign-up",
+] as const;
+
+const patterns = clientRoutes.map((route) => new RegExp(`^${route.replaceAll(":id", "[^/]+")}/?$`));
+
+export function isClientRoute(path: string): boolean {
+  return patterns.some((pattern) => pattern.test(path));
+}

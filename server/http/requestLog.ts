@@ -1,0 +1,23 @@
+import type { RequestHandler } from "express";
+import { type Logger, pino } from "pino";
+import { pinoHttp } from "pino-http";
+
+export function createLogger(level: string): Logger {
+  return pino({ level });
+}
+
+/** One line for each request. Headers and bodies, which hold tokens and passwords, are never written. */
+export function requestLog(logger: Logger): RequestHandler {
+  return pinoHttp({
+    logger,
+    serializers: {
+      req: (req: { id: unknown; method: string; url: string }) => ({
+        id: req.id,
+        method: req.method,
+        path: req.url.split("?")[0],
+      }),
+      res: (res: { statusCode: number }) => ({ status: res.statusCode }),
+    },
+    customLogLevel: (_req, res, error) => (error || res.statusCode >= 500 ? "error" : "info"),
+  });
+}

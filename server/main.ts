@@ -1,0 +1,73 @@
+import "reflect-metadata";
+import { createServer } from "node:http";
+import type { AddressInfo } from "node:net";
+import { preparePasswords } from "./auth/passwords";
+import { createApp } from "./createApp";
+import { createDataSource } from "./database/dataSource";
+import { migrate } from "./database/migrate";
+import { EnvError, readEnv } from "./env";
+import { createLogger } from "./http/requestLog";
+
+/** How long a request may still take after the server was told to stop. */
+const patienceMs = 5000;
+
+/** What stands in the way of a start, in a sentence. */
+class StartError extends Error {}
+
+async function main(): Promise<void> {
+  const env = readEnv();
+  const logger = createLogger(env.logLevel);
+  await migrate(env.databaseUrl).catch((error: unknown) => {
+    throw new StartError(`The database does not answer or cannot be brought up to date: ${describe(error)}`);
+  });
+  const dataSource = await createDataSource(env.databaseUrl, (error) => logger.warn(error)).initialize();
+  await preparePasswords();
+
+  const { app } = createApp(dataSource, logger, env);
+  const server = createServer(app);
+  await new Promise<void>((resolve, reject) => {
+    server.once("error", (error: NodeJS.ErrnoException) => {
+      const inUse = error.code === "EADDRINUSE";
+      reject(
+        new StartError(
+          inUse
+            ? `Port ${env.port} is in use. Choose another one with PORT.`
+            : `Cannot listen on ${env.host}:${env.port}: ${error.message}`,
+        ),
+      );
+    });
+    server.listen(env.port, env.host, resolve);
+  });
+
+  const { port } = server.address() as AddressInfo;
+  const host = env.host.includes(":") ? `[${env.host}]` : env.host;
+  say(`Larkspan is ready at ${env.publicOrigin ?? `http://${host}:${port}`}`);
+
+  const stop = () => {
+    setTimeout(() => server.closeAllConnections(), patienceMs).unref();
+    server.close(() => void dataSource.destroy());
+  };
+  process.once("SIGINT", stop);
+  process.once("SIGTERM", stop);
+}
+
+function say(line: string): void {
+  process.stdout.write(`${line}\n`);
+}
+
+function describe(error: unknown): string {
+  if (error instanceof AggregateError) return error.errors.map(describe).join("; ");
+  return error instanceof Error ? error.message : String(error);
+}
+
+main().catch((error: unknown) => {
+  const known = error instanceof EnvError || error instanceof StartError;
+  const lines =
+    error instanceof EnvError ? ["The environment is not right:", ...error.lines.map((line) => `  ${line}`)] : [];
+  process.stderr.write(
+    known
+      ? `${(lines.length > 0 ? lines : [error.message]).join("\n")}\n`
+      : `${error instanceof Error ? error.stack : String(error)}\n`,
+  );
+  process.exit(1);
+});

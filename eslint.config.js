@@ -6,7 +6,7 @@ const query = require("@tanstack/eslint-plugin-query");
 const globals = require("globals");
 
 module.exports = defineConfig([
-  { ignores: ["dist*/**", "build/**", ".expo/**", ".data/**", "node_modules/**", "expo-env.d.ts"] },
+  { ignores: ["dist*/**", "build/**", ".expo/**", ".data/**", "node_modules/**", "public/worklets/takeWorker.js", "expo-env.d.ts"] },
   { linterOptions: { reportUnusedDisableDirectives: "error" } },
   expo,
   ...query.configs["flat/recommended"],

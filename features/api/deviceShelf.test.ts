@@ -2,7 +2,7 @@ import { aDecision, aSong, aTake, aVoice } from "@/__tests__/client/belongings";
 import { kept, refuseStorage } from "@/__tests__/client/memoryIdb";
 import { deviceShelf } from "./deviceShelf";
 
-jest.mock("idb-keyval", () => (require("@/__tests__/client/memoryIdb") as { memoryIdb: object }).memoryIdb);
+jest.mock("idb-keyval", () => jest.requireActual<{ memoryIdb: object }>("@/__tests__/client/memoryIdb").memoryIdb);
 
 beforeEach(() => {
   kept.clear();

@@ -7,7 +7,7 @@ import { queryClient } from "./queryClient";
 import { session } from "./session";
 import { shelf } from "./shelf";
 
-jest.mock("idb-keyval", () => (require("@/__tests__/client/memoryIdb") as { memoryIdb: object }).memoryIdb);
+jest.mock("idb-keyval", () => jest.requireActual<{ memoryIdb: object }>("@/__tests__/client/memoryIdb").memoryIdb);
 
 const credentials = { email: "maren@orlow.example", password: "tide tables 1907" };
 const songs = { queryKey: ["songs"], queryFn: () => shelf.list("songs") };

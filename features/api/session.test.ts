@@ -11,8 +11,8 @@ let api: FakeApi;
 /** A freshly loaded page in the same browser. */
 function openPage() {
   jest.resetModules();
-  const { http } = require("./httpClient") as typeof Client;
-  const { session } = require("./session") as typeof Store;
+  const { http } = jest.requireActual<typeof Client>("./httpClient");
+  const { session } = jest.requireActual<typeof Store>("./session");
   return { http, session };
 }
 

@@ -1,0 +1,142 @@
+import { QueryClientProvider } from "@tanstack/react-query";
+import { act, fireEvent, render, screen, waitFor } from "@testing-library/react";
+import { aSong, aTake, aVoice } from "@/__tests__/client/belongings";
+import { FakeApi } from "@/__tests__/client/fakeApi";
+import { kept } from "@/__tests__/client/memoryIdb";
+import { queryClient } from "@/features/api/queryClient";
+import { session } from "@/features/api/session";
+import { shelf } from "@/features/api/shelf";
+import { EntryPage } from "./EntryPage";
+import type { EntryKind } from "./useEntry";
+
+jest.mock("idb-keyval", () => jest.requireActual<{ memoryIdb: object }>("@/__tests__/client/memoryIdb").memoryIdb);
+jest.mock("expo-router", () => ({
+  Link: ({ href, children }: { href: string; children: React.ReactNode }) => <a href={href}>{children}</a>,
+  Redirect: ({ href }: { href: string }) => <output data-testid="redirect">{href}</output>,
+}));
+
+const email = "maren@orlow.example";
+const password = "tide tables 1907";
+let api: FakeApi;
+
+beforeEach(async () => {
+  localStorage.clear();
+  kept.clear();
+  api = new FakeApi();
+  api.install();
+  await session.settled();
+});
+
+afterEach(async () => {
+  api.intercept = () => undefined;
+  await act(() => session.signOut());
+  queryClient.clear();
+});
+
+const open = (kind: EntryKind, next?: string) =>
+  render(
+    <QueryClientProvider client={queryClient}>
+      <EntryPage kind={kind} next={next} />
+    </QueryClientProvider>,
+  );
+
+const type = (label: string, text: string) => fireEvent.change(screen.getByLabelText(label), { target: { value: text } });
+const value = (label: string) => (screen.getByLabelText(label) as HTMLInputElement).value;
+
+function fillAndSend(form: "Sign up" | "Sign in", typed = { email, password }) {
+  type("E-mail address", typed.email);
+  type("Password", typed.password);
+  fireEvent.submit(screen.getByRole("form", { name: form }));
+}
+
+it("signs up, moves in what is on the device, and goes back to where the person came from", async () => {
+  const voice = aVoice();
+  await shelf.put("voices", voice);
+  await shelf.put("takes", aTake(voice.id));
+  open("sign-up", "/songs/7");
+  expect(await screen.findByText(/moves into your account: 1 voice and 1 take\./)).toBeTruthy();
+  fillAndSend("Sign up");
+  expect((await screen.findByTestId("redirect")).textContent).toBe("/songs/7");
+  expect(api.tables.takes.size).toBe(1);
+  expect([...kept.keys()]).toEqual([]);
+});
+
+it("goes to the account, where it is told, when something could not move", async () => {
+  await shelf.put("songs", aSong({ title: "" }));
+  open("sign-up", "/songs/7");
+  fillAndSend("Sign up");
+  expect((await screen.findByTestId("redirect")).textContent).toBe("/account");
+});
+
+it("does not follow an address of another site", async () => {
+  open("sign-up", "//elsewhere.example/songs");
+  fillAndSend("Sign up");
+  expect((await screen.findByTestId("redirect")).textContent).toBe("/");
+});
+
+it("says beside the field that a password is too short, sends nothing and keeps what was typed", async () => {
+  open("sign-up");
+  fillAndSend("Sign up", { email, password: "short" });
+  expect(await screen.findByText("Use at least 12 characters.")).toBeTruthy();
+  expect(api.calls).toEqual([]);
+  expect([value("E-mail address"), value("Password")]).toEqual([email, "short"]);
+  expect(screen.getByLabelText("Password").getAttribute("aria-invalid")).toBe("true");
+  await waitFor(() => expect(document.activeElement).toBe(screen.getByLabelText("Password")));
+});
+
+it("shows the server's sentence for each field in place", async () => {
+  open("sign-up");
+  fillAndSend("Sign up", { email: "maren", password });
+  expect(await screen.findByText("Write an e-mail address, like name@example.org.")).toBeTruthy();
+  await waitFor(() => expect(document.activeElement).toBe(screen.getByLabelText("E-mail address")));
+  expect(value("Password")).toBe(password);
+});
+
+it("puts a taken address at the address, and lets the person mend it", async () => {
+  api.addPerson(email, "another long one");
+  open("sign-up");
+  fillAndSend("Sign up");
+  expect(await screen.findByText(/an account with this e-mail address already/)).toBeTruthy();
+  type("E-mail address", "m.oake@orlow.example");
+  fireEvent.submit(screen.getByRole("form"));
+  expect(await screen.findByTestId("redirect")).toBeTruthy();
+});
+
+it("says that address and password do not belong together, and keeps both", async () => {
+  api.addPerson(email, password);
+  open("sign-in");
+  fillAndSend("Sign in", { email, password: "not the one" });
+  expect((await screen.findByRole("alert")).textContent).toMatch(/do not belong together/);
+  expect([value("E-mail address"), value("Password")]).toEqual([email, "not the one"]);
+  expect(api.count("POST /auth/refresh")).toBe(0);
+});
+
+it("keeps everything when there is no network, and succeeds at the next try", async () => {
+  api.addPerson(email, password);
+  api.intercept = () => "down";
+  open("sign-in");
+  fillAndSend("Sign in");
+  expect(await screen.findByText(/cannot be reached.*What you typed is still here\./)).toBeTruthy();
+  api.intercept = () => undefined;
+  fireEvent.submit(screen.getByRole("form"));
+  expect(await screen.findByTestId("redirect")).toBeTruthy();
+});
+
+it("is a form that password keepers understand", () => {
+  const { unmount } = open("sign-up");
+  expect(screen.getByLabelText("E-mail address").getAttribute("autocomplete")).toBe("email");
+  const secret = screen.getByLabelText("Password");
+  expect([secret.getAttribute("autocomplete"), secret.getAttribute("type")]).toEqual(["new-password", "password"]);
+  fireEvent.click(screen.getByText("Show password"));
+  expect(secret.getAttribute("type")).toBe("text");
+  fireEvent.click(screen.getByText("Hide password"));
+  expect(secret.getAttribute("type")).toBe("password");
+  unmount();
+  open("sign-in");
+  expect(screen.getByLabelText("Password").getAttribute("autocomplete")).toBe("current-password");
+});
+
+it("carries the way back over to the other form", () => {
+  open("sign-in", "/songs/7");
+  expect(screen.getByRole("link", { name: "Sign up" }).getAttribute("href")).toBe("/account/sign-up?next=%2Fsongs%2F7");
+});

@@ -1,0 +1,20 @@
+import type { Counts } from "@/features/api/belongings";
+import type { Collection } from "@/features/api/items";
+
+const words: Record<Collection, readonly [one: string, many: string]> = {
+  voices: ["voice", "voices"],
+  takes: ["take", "takes"],
+  songs: ["song", "songs"],
+  decisions: ["chosen key", "chosen keys"],
+  instruments: ["instrument", "instruments"],
+};
+
+/** "1 voice, 3 takes and 2 songs"; null where there is nothing. */
+export function belongingsInWords(counts: Counts): string | null {
+  const parts = (Object.keys(words) as Collection[])
+    .filter((name) => counts[name] > 0)
+    .map((name) => `${counts[name]} ${words[name][counts[name] === 1 ? 0 : 1]}`);
+  const last = parts.pop();
+  if (last === undefined) return null;
+  return parts.length === 0 ? last : `${parts.join(", ")} and ${last}`;
+}

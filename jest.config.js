@@ -1,8 +1,8 @@
 const esm =
-  "node_modules/(?!(react-native|@react-native|@react-native-community|expo|expo-.*|@expo|react-navigation|@react-navigation|pitchy|fft.js|abcjs)/)";
+  "node_modules/(?!(react-native(-[a-z-]+)?|@react-native|@react-native-community|expo|expo-.*|@expo|react-navigation|@react-navigation|pitchy|fft.js|abcjs)/)";
 const alias = { "^@/(.*)$": "<rootDir>/$1" };
 const client = {
-  moduleNameMapper: { ...alias, "\\.woff2?$": "<rootDir>/__tests__/client/fontFile.js" },
+  moduleNameMapper: { "\\.woff2?$": "<rootDir>/__tests__/client/fontFile.js", ...alias },
   transformIgnorePatterns: [`/${esm}`],
 };
 const swc = [

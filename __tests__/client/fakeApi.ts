@@ -114,7 +114,7 @@ export class FakeApi {
     }
     const parsed = (path === "/auth/sign-up" ? signUpRequest : signInRequest).safeParse(body);
     if (!parsed.success)
-      return problem(400, "invalid", "Something is missing.", parsed.error.issues.map((issue) => ({ path: issue.path.join("."), message: issue.message })));
+      return problem(422, "invalid", "Something is missing.", parsed.error.issues.map((issue) => ({ path: issue.path.join("."), message: issue.message })));
     const { email, password } = parsed.data;
     const known = this.#people.find((each) => each.email === email);
     if (path === "/auth/sign-up") {
@@ -144,7 +144,7 @@ export class FakeApi {
     }
     const parsed = schemas[name].safeParse(body);
     if (!parsed.success)
-      return problem(400, "invalid", "Something is missing.", parsed.error.issues.map((issue) => ({ path: issue.path.join("."), message: issue.message })));
+      return problem(422, "invalid", "Something is missing.", parsed.error.issues.map((issue) => ({ path: issue.path.join("."), message: issue.message })));
     const item = parsed.data as Row["item"];
     const missing = (target: Name, key: string) => typeof item[key] === "string" && this.tables[target].get(item[key])?.owner !== owner;
     if (missing("voices", "voiceId") || missing("songs", "songId")) return problem(422, "unknown-reference", "This belongs to something you do not have.");

@@ -125,12 +125,12 @@ it("keeps everything when there is no network, and succeeds at the next try", as
 it("is a form that password keepers understand", () => {
   const { unmount } = open("sign-up");
   expect(screen.getByLabelText("E-mail address").getAttribute("autocomplete")).toBe("email");
-  const secret = screen.getByLabelText("Password");
-  expect([secret.getAttribute("autocomplete"), secret.getAttribute("type")]).toEqual(["new-password", "password"]);
+  const secret = screen.getByLabelText<HTMLInputElement>("Password");
+  expect([secret.getAttribute("autocomplete"), secret.type]).toEqual(["new-password", "password"]);
   fireEvent.click(screen.getByText("Show password"));
-  expect(secret.getAttribute("type")).toBe("text");
+  expect(secret.type).toBe("text");
   fireEvent.click(screen.getByText("Hide password"));
-  expect(secret.getAttribute("type")).toBe("password");
+  expect(secret.type).toBe("password");
   unmount();
   open("sign-in");
   expect(screen.getByLabelText("Password").getAttribute("autocomplete")).toBe("current-password");

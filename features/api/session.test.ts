@@ -119,7 +119,7 @@ describe("failures", () => {
   it("carry the server's code, sentence and fields", async () => {
     const { session } = openPage();
     await expect(session.signUp({ email, password: "short" })).rejects.toMatchObject({
-      status: 400,
+      status: 422,
       code: "invalid",
       fields: [{ path: "password", message: "Use at least 12 characters." }],
     });

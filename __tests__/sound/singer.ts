@@ -158,7 +158,7 @@ function soundVoice(sounding: Sounding[], pitch: (t: number) => number, options:
       loudness = 1 + shimmer * random.normal();
     }
     source *= loudness;
-    soft = tilt * soft + (1 - tilt) * (source + breath * 6 * random.normal());
+    soft = tilt * soft + (1 - tilt) * (source + breath * 2 * random.normal());
     const hiss = note.consonantFrom !== null && t >= note.consonantFrom && t < note.start - 0.005 ? 0.02 * random.normal() : 0;
     out[i] = filter.next(soft * gain) + hiss;
   }

@@ -18,21 +18,25 @@ export interface LagFrame {
   levelDb: number;
 }
 
+/** Length of the second, shorter look at frames where the pitch moves too fast for the first: 32 ms. */
+export const SHORT_WINDOW = 256;
+
 /**
  * Makes a function that measures one window. Keeps r and m apart, so that the mean r and m of the room
  * can be subtracted before the quotient is taken: uncorrelated sounds add in the lag domain.
  *
- * @returns measure(samples, from): reads 512 samples at 8 kHz from index `from`; places outside the array count as silence
+ * @param length samples in a window, even, above MAX_LAG + 80
+ * @returns measure(samples, from): reads `length` samples at 8 kHz from index `from`; places outside the array count as silence
  * @see P. McLeod, G. Wyvill, "A smarter way to find pitch", ICMC 2005 (normalised square difference)
  * @example createLagMeter()(new Float32Array(512), 0).levelDb // => -Infinity
  */
-export function createLagMeter(): (samples: Float32Array, from: number) => LagFrame {
-  const autocorrelator = Autocorrelator.forFloat32Array(WINDOW);
-  const window = new Float32Array(WINDOW);
-  const correlation = new Float32Array(WINDOW);
+export function createLagMeter(length = WINDOW): (samples: Float32Array, from: number) => LagFrame {
+  const autocorrelator = Autocorrelator.forFloat32Array(length);
+  const window = new Float32Array(length);
+  const correlation = new Float32Array(length);
   return (samples, from) => {
     let energy = 0;
-    for (let i = 0; i < WINDOW; i++) {
+    for (let i = 0; i < length; i++) {
       const x = samples[from + i] ?? 0;
       window[i] = x;
       energy += x * x;
@@ -43,13 +47,13 @@ export function createLagMeter(): (samples: Float32Array, from: number) => LagFr
       autocorrelator.autocorrelate(window, correlation);
       let both = 2 * energy;
       for (let lag = 0; lag <= MAX_LAG; lag++) {
-        if (lag > 0) both -= window[lag - 1]! ** 2 + window[WINDOW - lag]! ** 2;
+        if (lag > 0) both -= window[lag - 1]! ** 2 + window[length - lag]! ** 2;
         r[lag] = correlation[lag]!;
         m[lag] = Math.max(0, both);
       }
     }
     let middle = 0;
-    for (let i = WINDOW / 2 - HOP; i < WINDOW / 2 + HOP; i++) middle += window[i]! ** 2;
+    for (let i = length / 2 - HOP; i < length / 2 + HOP; i++) middle += window[i]! ** 2;
     return { r, m, levelDb: 10 * Math.log10(middle / HOP) };
   };
 }

@@ -1,4 +1,4 @@
-import { createLagMeter, HOP, WINDOW, type LagFrame } from "../signal/lagFrame";
+import { createLagMeter, HOP, SHORT_WINDOW, WINDOW, type LagFrame } from "../signal/lagFrame";
 import { createResampler } from "../signal/resampler";
 import { findCandidates, type CandidateFrame } from "./pitchCandidates";
 import { createPathFinder } from "./pitchPath";
@@ -34,6 +34,7 @@ export interface LiveFrame {
 export function createLiveTracker(sampleRate: number): { push(pcm: Float32Array): LiveFrame[] } {
   const resampler = createResampler(sampleRate);
   const measure = createLagMeter();
+  const measureShort = createLagMeter(SHORT_WINDOW);
   const finder = createPathFinder(LOOK_AHEAD_FRAMES + 1);
   let sound = new Float32Array(WINDOW / 2);
   let heard: LagFrame[] = [];
@@ -42,12 +43,12 @@ export function createLiveTracker(sampleRate: number): { push(pcm: Float32Array)
   let measured = 0;
   let decided = 0;
 
-  function listen(lagFrame: LagFrame): LiveFrame | null {
+  function listen(lagFrame: LagFrame, short: () => LagFrame): LiveFrame | null {
     heard.push(lagFrame);
     if (heard.length > 2 * ROOM_MEMORY) heard = heard.slice(-ROOM_MEMORY);
     if (measured % ROOM_EVERY === 0) room = measureRoom(heard.slice(-ROOM_MEMORY));
     measured++;
-    const frame = findCandidates(lagFrame, room);
+    const frame = findCandidates(lagFrame, room, short);
     finder.push(frame);
     waiting.push(frame);
     const point = finder.decide(LOOK_AHEAD_FRAMES);
@@ -67,7 +68,8 @@ export function createLiveTracker(sampleRate: number): { push(pcm: Float32Array)
       const out: LiveFrame[] = [];
       let from = 0;
       for (; from + WINDOW <= joined.length; from += HOP) {
-        const frame = listen(measure(joined, from));
+        const middle = from + WINDOW / 2;
+        const frame = listen(measure(joined, from), () => measureShort(joined, middle - SHORT_WINDOW / 2));
         if (frame) out.push(frame);
       }
       sound = joined.slice(from);

@@ -2,7 +2,8 @@ import type { HeardNote } from "./sungNotes";
 
 /** A short note farther than this from every other is taken for a tracker's slip or a squeak. */
 export const LONE_DISTANCE_SEMITONES = 5.5;
-const LONE_SHORT_S = 0.6;
+const LONE_SHORT_S = 0.3;
+const LONE_UNCLEAR_SHORT_S = 0.6;
 const SOFT_DB = 14;
 const VERY_SOFT_DB = 24;
 const UNCLEAR = 0.85;
@@ -22,7 +23,7 @@ export function weedNotes(notes: readonly HeardNote[]): HeardNote[] {
     return { ...note, clear: note.sustained && !faint };
   });
   return believed.map((note) => {
-    if (!note.clear || note.heldS >= LONE_SHORT_S) return note;
+    if (!note.clear || note.heldS >= (note.clarity < UNCLEAR ? LONE_UNCLEAR_SHORT_S : LONE_SHORT_S)) return note;
     const others = believed.filter((other) => other.clear && other.start !== note.start);
     const lone = others.length > 0 && others.every((other) => Math.abs(other.midi - note.midi) > LONE_DISTANCE_SEMITONES);
     return { ...note, clear: !lone };

@@ -1,12 +1,16 @@
 import { ANALYSIS_RATE } from "../signal/resampler";
-import { MAX_LAG, type LagFrame } from "../signal/lagFrame";
-import type { RoomFloor } from "./roomFloor";
+import { MAX_LAG, SHORT_WINDOW, WINDOW, type LagFrame } from "../signal/lagFrame";
+import { DIGITAL_SILENCE_DB, type RoomFloor } from "./roomFloor";
 
 /** Search limits of the tracker in Hz. */
 export const LOWEST_HZ = 60;
 export const HIGHEST_HZ = 1400;
 const MOST_CANDIDATES = 8;
 const LEAST_CLARITY = 0.2;
+/** Below this clarity a frame is looked at again through the short window, */
+const CLEAR_ENOUGH = 0.8;
+/** whose peaks are worth a little less, being found among fewer samples. */
+const SHORT_DISCOUNT = 0.96;
 
 /** One possible pitch of a frame. */
 export interface PitchCandidate {
@@ -32,16 +36,33 @@ export interface CandidateFrame {
  *
  * @param frame lag-domain picture of the frame
  * @param room what the room alone sounds like, subtracted first
+ * @param short measures the same frame through the short window; asked for only where the long one is unclear
  * @returns up to 8 candidates between 60 and 1400 Hz, shortest period first
  * @see P. McLeod, G. Wyvill, ICMC 2005; S. Boll, IEEE Trans. ASSP 27(2) 1979 (subtraction of mean noise power)
  */
-export function findCandidates(frame: LagFrame, room: RoomFloor): CandidateFrame {
+export function findCandidates(frame: LagFrame, room: RoomFloor, short: () => LagFrame): CandidateFrame {
   const power = frame.m[0]!;
   const roomPower = room.m[0]!;
   const aboveRoomDb = power <= 0 ? -60 : roomPower <= 0 ? 60 : Math.max(-60, Math.min(60, 10 * Math.log10(power / roomPower)));
   const out: CandidateFrame = { candidates: [], levelDb: frame.levelDb, aboveRoomDb };
   if (power <= 0) return out;
-  const n = cleanedDifference(frame, room);
+  const long = peaks(cleanedDifference(frame, room, WINDOW));
+  const clearest = long.reduce((top, c) => Math.max(top, c.clarity), 0);
+  const loudEnough = aboveRoomDb > 3 && frame.levelDb > DIGITAL_SILENCE_DB;
+  out.candidates = clearest < CLEAR_ENOUGH && loudEnough ? joined(long, peaks(cleanedDifference(short(), room, SHORT_WINDOW))) : long;
+  return out;
+}
+
+/** Keeps the clearer of two candidates that stand for the same pitch. */
+function joined(long: PitchCandidate[], short: PitchCandidate[]): PitchCandidate[] {
+  const discounted = short.map((c) => ({ ...c, clarity: c.clarity * SHORT_DISCOUNT }));
+  const kept = long.filter((c) => !discounted.some((s) => Math.abs(s.midi - c.midi) < 0.7 && s.clarity > c.clarity));
+  const added = discounted.filter((s) => !kept.some((c) => Math.abs(s.midi - c.midi) < 0.7));
+  return [...kept, ...added];
+}
+
+function peaks(n: Float32Array): PitchCandidate[] {
+  const found: PitchCandidate[] = [];
   const shortest = Math.floor(ANALYSIS_RATE / HIGHEST_HZ);
   for (let lag = shortest; lag < MAX_LAG - 4; lag++) {
     const here = n[lag]!;
@@ -50,21 +71,21 @@ export function findCandidates(frame: LagFrame, room: RoomFloor): CandidateFrame
     const hz = ANALYSIS_RATE / period;
     if (clarity < LEAST_CLARITY || hz < LOWEST_HZ || hz > HIGHEST_HZ) continue;
     const half = valueAt(n, period / 2);
-    out.candidates.push({ hz, midi: 69 + 12 * Math.log2(hz / 440), clarity: Math.min(1, clarity), oddShare: Math.max(0, (clarity - half) / 2) });
+    found.push({ hz, midi: 69 + 12 * Math.log2(hz / 440), clarity: Math.min(1, clarity), oddShare: Math.max(0, (clarity - half) / 2) });
   }
-  if (out.candidates.length > MOST_CANDIDATES) {
-    const floor = out.candidates.map((c) => c.clarity).sort((a, b) => b - a)[MOST_CANDIDATES - 1]!;
-    out.candidates = out.candidates.filter((c) => c.clarity >= floor);
-  }
-  return out;
+  if (found.length <= MOST_CANDIDATES) return found;
+  const floor = found.map((c) => c.clarity).sort((a, b) => b - a)[MOST_CANDIDATES - 1]!;
+  return found.filter((c) => c.clarity >= floor);
 }
 
-function cleanedDifference(frame: LagFrame, room: RoomFloor): Float32Array {
+/** The room's share of a window scales with the overlap at each lag. */
+function cleanedDifference(frame: LagFrame, room: RoomFloor, length: number): Float32Array {
   const n = new Float32Array(MAX_LAG + 1);
   for (let lag = 0; lag <= MAX_LAG; lag++) {
     const whole = frame.m[lag]!;
-    const rest = Math.max(whole - room.m[lag]!, 0.2 * whole);
-    n[lag] = rest > 0 ? (2 * (frame.r[lag]! - room.r[lag]!)) / rest : 0;
+    const share = (length - lag) / (WINDOW - lag);
+    const rest = Math.max(whole - share * room.m[lag]!, 0.2 * whole);
+    n[lag] = rest > 0 ? (2 * (frame.r[lag]! - share * room.r[lag]!)) / rest : 0;
   }
   return n;
 }

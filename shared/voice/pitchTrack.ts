@@ -1,4 +1,4 @@
-import { createLagMeter, HOP, WINDOW, type LagFrame } from "../signal/lagFrame";
+import { createLagMeter, HOP, SHORT_WINDOW, WINDOW } from "../signal/lagFrame";
 import { createResampler } from "../signal/resampler";
 import { findCandidates, type CandidateFrame } from "./pitchCandidates";
 import { createPathFinder } from "./pitchPath";
@@ -28,15 +28,19 @@ export interface PitchTrack {
  * @throws RangeError if the rate is outside 8-192 kHz
  */
 export function trackPitch(pcm: Float32Array, sampleRate: number): PitchTrack {
-  const lagFrames = measureTake(pcm, sampleRate);
+  const sound = atAnalysisRate(pcm, sampleRate);
+  const measure = createLagMeter();
+  const measureShort = createLagMeter(SHORT_WINDOW);
+  const count = Math.floor((pcm.length / sampleRate) * 100);
+  const lagFrames = Array.from({ length: count }, (_, k) => measure(sound, k * HOP - WINDOW / 2));
   const room = measureRoom(lagFrames);
   const finder = createPathFinder();
   const found: CandidateFrame[] = [];
-  for (const lagFrame of lagFrames) {
-    const frame = findCandidates(lagFrame, room);
+  lagFrames.forEach((lagFrame, k) => {
+    const frame = findCandidates(lagFrame, room, () => measureShort(sound, k * HOP - SHORT_WINDOW / 2));
     found.push(frame);
     finder.push(frame);
-  }
+  });
   const frames = finder.path().map((point, k) => trackFrame(found[k]!, point.candidate?.hz ?? null, point.candidate?.clarity));
   return { frames, room };
 }
@@ -47,16 +51,12 @@ export function trackFrame(frame: CandidateFrame, hz: number | null, clarity?: n
   return { hz, clarity: Math.max(0, Math.min(1, best)), levelDb: frame.levelDb, aboveRoomDb: frame.aboveRoomDb };
 }
 
-function measureTake(pcm: Float32Array, sampleRate: number): LagFrame[] {
+function atAnalysisRate(pcm: Float32Array, sampleRate: number): Float32Array {
   const resampler = createResampler(sampleRate);
   const start = resampler.push(pcm);
   const rest = resampler.finish();
   const sound = new Float32Array(start.length + rest.length);
   sound.set(start);
   sound.set(rest, start.length);
-  const measure = createLagMeter();
-  const count = Math.floor((pcm.length / sampleRate) * 100);
-  const out: LagFrame[] = [];
-  for (let k = 0; k < count; k++) out.push(measure(sound, k * HOP - WINDOW / 2));
-  return out;
+  return sound;
 }

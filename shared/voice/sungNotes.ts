@@ -8,6 +8,8 @@ export const HELD_WITHIN_CENTS = 60;
 export const HELD_IN_PHRASE_S = 0.24;
 /** Least held time in a guided hold, in seconds. */
 export const HELD_IN_HOLD_S = 0.5;
+/** The analysis window hides about 20 ms of a note at each end; measured stretches are this much shorter than sung ones. */
+const HIDDEN_S = 0.04;
 const SHORTEST_NOTE_FRAMES = 6;
 const BRIDGED_GAP_FRAMES = 3;
 
@@ -61,7 +63,7 @@ function voicedRuns(frames: readonly TrackFrame[]): [number, number][] {
 function describe(frames: readonly TrackFrame[], at: number[], midi: number[], contour: number[], leastHeldS: number): HeardNote {
   const centre = heldCentre(contour);
   const held = longestHeld(contour, centre);
-  const heldS = (held.to - held.from) / 100;
+  const heldS = (held.to - held.from) / 100 + HIDDEN_S;
   let deviation = 0;
   let power = 0;
   let clarity = 0;

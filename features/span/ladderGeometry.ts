@@ -1,0 +1,106 @@
+import { glyphs, noteName, pitchClass, type Spelling } from "@/shared/music/pitch";
+import type { KeyMark, SingingVoice } from "@/shared/keys/keyScore";
+
+/** Steps a ladder may have, px a semitone: result, first page, card. */
+export type LadderStep = 18 | 15 | 12;
+
+/** What goes with each step: column, its end radius, place of names and rungs, height of marks, room round the column. */
+export const ladderMeasures = {
+  18: { column: 64, radius: 14, names: 26, rungs: 34, columnX: 44, mark: 8, gap: 8, ground: 4, font: 13, tick: 8, noteGap: 2.5 },
+  15: { column: 52, radius: 14, names: 24, rungs: 32, columnX: 42, mark: 9, gap: 8, ground: 5, font: 13, tick: 8, noteGap: 2.5 },
+  12: { column: 44, radius: 11, names: 22, rungs: 29, columnX: 38, mark: 8, gap: 6, ground: 3, font: 12, tick: 6, noteGap: 2 },
+} as const;
+
+const naturals = new Set([0, 2, 4, 5, 7, 9, 11]);
+
+/** Whether a semitone has a name of its own on the ladder. */
+export function isNatural(midi: number): boolean {
+  return naturals.has(pitchClass(midi));
+}
+
+/** Lowest and highest semitone of a picture, whole MIDI numbers. */
+export interface Scale {
+  low: number;
+  high: number;
+}
+
+/** The semitones that a ladder must show: voice and marks with a rung of air, ending on naturals. */
+export function ladderScale(voice: SingingVoice | null, marks: readonly Pick<KeyMark, "midi">[], air: number): Scale {
+  const ends = [...(voice ? [Math.round(voice.range.lowMidi), Math.round(voice.range.highMidi)] : []), ...marks.map((mark) => mark.midi)];
+  if (ends.length === 0) return { low: 52, high: 74 };
+  let low = Math.min(...ends) - air;
+  let high = Math.max(...ends) + air;
+  if (!isNatural(low)) low -= 1;
+  if (!isNatural(high)) high += 1;
+  return { low, high };
+}
+
+/** Height of a pitch on a ladder whose top rung is `scale.high`; `pad` is the room above that rung. */
+export function yOf(midi: number, scale: Scale, step: number, pad: number): number {
+  return pad + (scale.high - midi) * step;
+}
+
+/** Where a pitch lies in a voice. Pitches are compared by the nearest semitone, as they are sung and drawn. */
+export function zoneOf(midi: number, voice: SingingVoice): KeyMark["zone"] {
+  const inside = (band: { lowMidi: number; highMidi: number }) => midi >= Math.round(band.lowMidi) && midi <= Math.round(band.highMidi);
+  if (inside(voice.comfort)) return "comfort";
+  return inside(voice.range) ? "reach" : "beyond";
+}
+
+/** Whether a mark lies above the voice or under it. */
+export function sideOf(midi: number, voice: SingingVoice): "above" | "below" {
+  return midi >= (voice.range.lowMidi + voice.range.highMidi) / 2 ? "above" : "below";
+}
+
+/** Length of a mark: by its share, never shorter than it is high. `perPercent` px for each per cent of the time. */
+export function markLength(share: number, perPercent: number, height: number): number {
+  return Math.max(height, share * 100 * perPercent);
+}
+
+/** px for each per cent, so that the longest mark still fits. */
+export function lengthPerPercent(marks: readonly Pick<KeyMark, "share">[], room: number): number {
+  const longest = Math.max(0.01, ...marks.map((mark) => mark.share)) * 100;
+  return Math.min(5.2, room / longest);
+}
+
+const say = (midi: number, spelling: Spelling) => glyphs(noteName(midi, spelling));
+
+function percent(marks: readonly KeyMark[], zone: KeyMark["zone"]): number {
+  return Math.round(100 * marks.filter((mark) => mark.zone === zone).reduce((sum, mark) => sum + mark.share, 0));
+}
+
+function beyondWords(marks: readonly KeyMark[], voice: SingingVoice, spelling: Spelling): string {
+  const names = marks.filter((mark) => mark.zone === "beyond").map((mark) => `${say(mark.midi, spelling)} ${sideOf(mark.midi, voice)} your range`);
+  return names.length === 0 ? "" : ` Beyond: ${names.join(", ")}.`;
+}
+
+/** The whole picture in words, for those who do not see it. */
+export function ladderWords(voice: SingingVoice | null, marks: readonly KeyMark[], spelling: Spelling = "sharps"): string {
+  const parts: string[] = [];
+  if (voice) {
+    parts.push(`Voice from ${say(voice.range.lowMidi, spelling)} to ${say(voice.range.highMidi, spelling)}.`);
+    parts.push(`Comfortable from ${say(voice.comfort.lowMidi, spelling)} to ${say(voice.comfort.highMidi, spelling)}.`);
+  }
+  if (marks.length > 0) {
+    const pitches = marks.map((mark) => mark.midi);
+    parts.push(`Notes from ${say(Math.min(...pitches), spelling)} to ${say(Math.max(...pitches), spelling)}.`);
+    if (voice) {
+      parts.push(`${percent(marks, "comfort")} % of the time in comfort, ${percent(marks, "reach")} % in reach, ${percent(marks, "beyond")} % beyond.${beyondWords(marks, voice, spelling)}`);
+    }
+  }
+  return parts.join(" ");
+}
+
+/** Moves labels apart to `distance`, keeping their order and staying as near to their places as one pass allows. */
+export function spread(places: readonly number[], distance: number): number[] {
+  const out = [...places];
+  for (let i = 1; i < out.length; i += 1) {
+    const over = (out[i - 1] ?? 0) + distance - (out[i] ?? 0);
+    if (over > 0) {
+      out[i - 1] = (out[i - 1] ?? 0) - over / 2;
+      out[i] = (out[i] ?? 0) + over / 2;
+      for (let k = i - 1; k > 0 && (out[k] ?? 0) - (out[k - 1] ?? 0) < distance; k -= 1) out[k - 1] = (out[k] ?? 0) - distance;
+    }
+  }
+  return out;
+}

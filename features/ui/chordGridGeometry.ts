@@ -1,0 +1,70 @@
+import type { Shape } from "@/shared/ways/way";
+
+/** Distances of a chord grid in px. */
+export interface GridMeasure {
+  string: number;
+  fret: number;
+  dot: number;
+}
+
+export const cardMeasure: GridMeasure = { string: 16, fret: 17, dot: 6.5 };
+export const pieceMeasure: GridMeasure = { string: 17, fret: 18, dot: 7.6 };
+
+/** Which frets a grid shows. */
+export interface GridWindow {
+  /** fret of the first row; 1 at the nut or capo */
+  first: number;
+  rows: number;
+}
+
+/** Four frets from the nut where the shape fits there, else from its lowest stopped fret; more rows where it needs them. */
+export function gridWindow(shape: Pick<Shape, "frets">): GridWindow {
+  const stopped = shape.frets.filter((fret): fret is number => fret !== null && fret > 0);
+  if (stopped.length === 0) return { first: 1, rows: 4 };
+  const low = Math.min(...stopped);
+  const high = Math.max(...stopped);
+  if (high <= 4 || low === 1) return { first: 1, rows: Math.max(4, high) };
+  return { first: low, rows: Math.max(4, high - low + 1) };
+}
+
+/** Horizontal place of a string; left-handed grids are mirrored. */
+export function stringX(index: number, strings: number, measure: GridMeasure, leftHanded: boolean): number {
+  return 20 + (leftHanded ? strings - 1 - index : index) * measure.string;
+}
+
+/** Height of the middle of a fret's space. */
+export function fretY(fret: number, window: GridWindow, top: number, measure: GridMeasure): number {
+  return top + (fret - window.first + 0.5) * measure.fret;
+}
+
+export interface SpokenGrid {
+  name: string;
+  shape: Shape;
+  capo: number;
+  sounds?: string | undefined;
+  /** note names of the strings, in playing order */
+  stringNames?: readonly string[] | undefined;
+}
+
+const ordinals = ["first", "second", "third", "fourth", "fifth", "sixth", "seventh", "eighth"];
+
+function stringWords(index: number, names: readonly string[] | undefined): string {
+  const name = names?.[index];
+  return name === undefined ? `${ordinals[index] ?? String(index + 1)} string` : `${name.replace(/-?\d+$/, "")} string`;
+}
+
+/** The whole grid in words, string by string from the bass side. */
+export function spokenGrid({ name, shape, capo, sounds, stringNames }: SpokenGrid): string {
+  const strings = shape.frets.map((fret, index) => {
+    const words = stringWords(index, stringNames);
+    if (fret === null) return `${words} silent`;
+    if (fret === 0) return `${words} open`;
+    const finger = shape.fingers[index] ?? 0;
+    return `${words} fret ${fret}${finger > 0 ? `, finger ${finger}` : ""}`;
+  });
+  const parts = [...strings];
+  if (shape.barre) parts.push(`barre at fret ${shape.barre.fret}`);
+  if (capo > 0) parts.push(`capo at fret ${capo}, frets counted from it`);
+  if (sounds !== undefined) parts.push(`sounds ${sounds}`);
+  return `${name}: ${parts.join("; ")}`;
+}

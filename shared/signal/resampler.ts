@@ -1,3 +1,5 @@
+import { createHighPass } from "./highPass";
+
 /** The one rate, in Hz, at which the engine analyses sound; every take is brought to it first. */
 export const ANALYSIS_RATE = 8000;
 
@@ -5,6 +7,8 @@ export const ANALYSIS_RATE = 8000;
 const HALF_LENGTH_S = 0.0011;
 const CUTOFF_HZ = 3000;
 const KAISER_BETA = 5.65;
+/** Steps on the floor and wind lie below; the lowest sung notes above. */
+const RUMBLE_HZ = 45;
 
 /** Brings sound, piece by piece, to the analysis rate. */
 export interface Resampler {
@@ -15,7 +19,8 @@ export interface Resampler {
 }
 
 /**
- * Makes a streaming low-pass resampler to 8 kHz (windowed sinc, Kaiser window, about 60 dB of stop band).
+ * Makes a streaming low-pass resampler to 8 kHz (windowed sinc, Kaiser window, about 60 dB of stop band),
+ * with rumble below 45 Hz taken out.
  * Sample n of the output stands at time n / 8000 s of the input, whatever the sizes of the pieces.
  *
  * @param sampleRate rate of the input in Hz, 8000 to 192000
@@ -36,6 +41,7 @@ export function createResampler(sampleRate: number): Resampler {
   let kept = new Float32Array(half);
   let keptFrom = -half;
   let nextOut = 0;
+  const withoutRumble = createHighPass(RUMBLE_HZ, ANALYSIS_RATE);
 
   function take(pcm: Float32Array): Float32Array {
     const input = new Float32Array(kept.length + pcm.length);
@@ -57,7 +63,7 @@ export function createResampler(sampleRate: number): Resampler {
     const firstNeeded = Math.floor((nextOut * step) / phases) - half + 1;
     kept = input.slice(Math.max(0, firstNeeded - keptFrom));
     keptFrom = Math.max(keptFrom, firstNeeded);
-    return Float32Array.from(out);
+    return withoutRumble(Float32Array.from(out));
   }
   return { push: take, finish: () => take(new Float32Array(half + 1)) };
 }

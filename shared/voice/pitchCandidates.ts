@@ -19,7 +19,7 @@ export interface PitchCandidate {
   midi: number;
   /** normalised square difference at the period after the room was subtracted, at most 1 */
   clarity: number;
-  /** share of the sound's power in the candidate's odd harmonics, 0 to about 0.5; near 0 tells an octave-down error */
+  /** share of the sound's power in the candidate's odd harmonics, 0 to 1; near 0 tells an octave-down error */
   oddShare: number;
 }
 
@@ -74,8 +74,12 @@ function peaks(n: Float32Array): PitchCandidate[] {
     found.push({ hz, midi: 69 + 12 * Math.log2(hz / 440), clarity: Math.min(1, clarity), oddShare: Math.max(0, (clarity - half) / 2) });
   }
   if (found.length <= MOST_CANDIDATES) return found;
-  const floor = found.map((c) => c.clarity).sort((a, b) => b - a)[MOST_CANDIDATES - 1]!;
-  return found.filter((c) => c.clarity >= floor);
+  return [...found].sort((a, b) => rank(b) - rank(a)).slice(0, MOST_CANDIDATES).sort((a, b) => b.hz - a.hz);
+}
+
+/** A period's multiples repeat as well as it does: where clarities are alike the shortest must stay. */
+function rank(candidate: PitchCandidate): number {
+  return candidate.clarity + 0.005 * candidate.midi;
 }
 
 /** The room's share of a window scales with the overlap at each lag. */

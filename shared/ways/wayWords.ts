@@ -1,0 +1,197 @@
+import type { KeyName } from "../music/keyName";
+import { parseChord } from "../music/chord";
+import { glyphs } from "../music/pitch";
+import type { Instrument } from "../instruments/instrument";
+import { tensionRatio } from "../instruments/tension";
+import type { Shape, StringChange, Way, WayChord } from "./way";
+
+/** What the words about a way are made from. */
+export interface WayFacts {
+  kind: Way["kind"];
+  retune: number;
+  capo: number;
+  shapeKey: KeyName;
+  /** the fingers play the chords of the chart as it is written */
+  asWritten: boolean;
+  /** the player knows every shape by name */
+  allKnown: boolean;
+  chords: readonly WayChord[];
+  /** chords whose bass the instrument cannot put lowest */
+  withoutBass: readonly string[];
+  difficulty: number;
+  strings: readonly StringChange[];
+  instrument: Instrument;
+}
+
+const kgPerLb = 0.45359237;
+const counts = [
+  "No",
+  "One",
+  "Two",
+  "Three",
+  "Four",
+  "Five",
+  "Six",
+  "Seven",
+  "Eight",
+  "Nine",
+  "Ten",
+  "Eleven",
+  "Twelve",
+];
+
+/**
+ * What to do, in one sentence without a full stop.
+ *
+ * @param facts of the way
+ * @returns such as "Capo 3, play shapes in A"
+ */
+export function wayTitle({ kind, retune, capo, shapeKey, allKnown }: WayFacts): string {
+  const name = keyInWords(shapeKey);
+  const shapes = allKnown ? `play the shapes you know in ${name}` : `play shapes in ${name}`;
+  if (kind === "as-is") return `Leave it as it is, ${shapes}`;
+  if (kind === "capo") return `Capo ${capo}, ${shapes}`;
+  const tuning = `Retune ${distanceInWords(retune)}`;
+  return kind === "retune" ? `${tuning}, ${shapes}` : `${tuning}, capo ${capo}, ${shapes}`;
+}
+
+/**
+ * The cost in words: kinds of shapes, strings to turn, frets left.
+ *
+ * @param facts of the way
+ * @returns one to three short sentences
+ */
+export function wayCost({ retune, capo, chords, asWritten, instrument }: WayFacts): string {
+  const sentences = [shapeKinds(chords.flatMap(({ shape }) => (shape ? [shape] : [])))];
+  if (asWritten) sentences.push("The chart as written.");
+  const strings = instrument.strings.length;
+  if (retune !== 0) sentences.push(`${counts[strings] ?? strings} strings to ${retune < 0 ? "let down" : "bring up"}.`);
+  if (capo > 0) sentences.push(`${instrument.frets - capo} frets left.`);
+  return sentences.filter(Boolean).join(" ");
+}
+
+/**
+ * Why this way is easy or hard.
+ *
+ * @param facts of the way
+ * @returns one or two sentences
+ */
+export function wayWhy({ kind, difficulty, chords, asWritten }: WayFacts): string {
+  const shapes = chords.flatMap(({ shape }) => (shape ? [shape] : []));
+  const word = difficulty < 0.4 ? "Easy" : difficulty < 0.47 ? "Middling" : "Harder";
+  const frets = shapes.flatMap(({ frets }) => frets.filter((fret) => fret !== null && fret > 0));
+  const highest = Math.max(0, ...frets.map((fret) => fret ?? 0));
+  const barres = chords.filter(({ shape }) => shape?.barre).map(({ played }) => glyphs(played));
+  const within = highest === 0 ? "open strings alone" : `all within the first ${plural(highest, "fret")}`;
+  const barreWords =
+    barres.length === 0 ? "no barre" : `${barres.length === 1 ? "a barre" : "barres"} for ${list(barres)}`;
+  const effect: Record<Way["kind"], string> = {
+    "as-is": "Nothing to clamp or retune.",
+    capo: "Nothing retuned.",
+    retune: asWritten ? "You read the chart as it stands." : "No capo on the neck.",
+    "retune-capo": asWritten ? "You read the chart as it stands." : "Retune and capo meet half way.",
+  };
+  return `${word}: ${within}, ${barreWords}. ${effect[kind]}`;
+}
+
+/**
+ * What to beware of.
+ *
+ * @param facts of the way
+ * @returns sentences, the weightiest first; may be empty
+ */
+export function wayCautions({ retune, capo, chords, withoutBass, strings, instrument }: WayFacts): string[] {
+  const cautions: string[] = [];
+  const missing = chords
+    .filter(({ shape, played }) => shape === null && parseChord(played) !== null)
+    .map(({ played }) => glyphs(played));
+  if (missing.length > 0) cautions.push(`This instrument has no playable shape for ${list(missing)}.`);
+  if (retune !== 0) cautions.push(...tensionCautions(retune, strings, instrument));
+  const short = instrument.strings.findIndex(({ startsAtFret }) => startsAtFret !== undefined);
+  if (short >= 0) {
+    const { note, startsAtFret = 0 } = instrument.strings[short]!;
+    const name = glyphs(note.replace(/-?\d+$/, ""));
+    if (capo > 0)
+      cautions.push(
+        `The short ${name} string needs its own stop ${plural(capo, "fret")} up, at fret ${startsAtFret + capo}.`,
+      );
+    const silent = chords
+      .filter(({ shape }) => shape && shape.frets[short] === null)
+      .map(({ played }) => glyphs(played));
+    if (silent.length > 0) cautions.push(`Leave the short ${name} string silent on ${list(silent)}.`);
+  }
+  if (withoutBass.length > 0)
+    cautions.push(`The bass behind the slash cannot lie lowest here: ${list(withoutBass.map(glyphs))}.`);
+  if (capo > 0) cautions.push("Check the tuning after clamping.");
+  if (capo > 5) cautions.push("So high up the sound is thin and the frets are narrow.");
+  return cautions;
+}
+
+function tensionCautions(retune: number, strings: readonly StringChange[], instrument: Instrument): string[] {
+  const change = Math.round(Math.abs(tensionRatio(retune) - 1) * 100);
+  const known = strings.find(({ beforeLb, afterLb }) => beforeLb !== null && afterLb !== null);
+  const sample = known
+    ? ` (${glyphs(known.from.replace(/-?\d+$/, ""))} string ${kg(known.beforeLb!)} to ${kg(known.afterLb!)} kg)`
+    : "";
+  const opening = `Tension ${retune < 0 ? "falls" : "rises"} by ${change} %${sample}.`;
+  const slack = strings.some(({ verdict }) => verdict === "slack");
+  const down = slack
+    ? "Below the slack limit of these strings: they buzz and fret sharp unless you put on a heavier set."
+    : "Above the slack limit for this set; press lightly or notes go sharp.";
+  const up = "A string can snap: eyes away, bring it up slowly, and check the maker's limits.";
+  const cautions = [`${opening} ${retune < 0 ? down : up}`];
+  if (instrument.strings.some(({ gaugeIn }) => gaugeIn === null))
+    cautions.push("Not every gauge is known, so the limits are judged by semitones alone.");
+  cautions.push("Retune before the evening, not on stage.");
+  return cautions;
+}
+
+/**
+ * A retune in words.
+ *
+ * @param semitones not 0; negative for down
+ * @returns distance and direction
+ * @example distanceInWords(-2) // => "a whole tone down"
+ */
+export function distanceInWords(semitones: number): string {
+  const size = Math.abs(semitones);
+  const words = ["no distance", "a semitone", "a whole tone", "three semitones", "two whole tones"];
+  return `${words[size] ?? `${size} semitones`} ${semitones < 0 ? "down" : "up"}`;
+}
+
+function shapeKinds(shapes: readonly Shape[]): string {
+  const barre = shapes.filter((shape) => shape.barre).length;
+  const open = shapes.filter((shape) => !shape.barre && shape.frets.includes(0)).length;
+  const closed = shapes.length - barre - open;
+  if (shapes.length === 0) return "";
+  if (barre === 0 && closed === 0) return "Open shapes only, no barre.";
+  const kinds = [...(open > 0 ? [`${counted(open)} open`] : []), ...(closed > 0 ? [`${counted(closed)} closed`] : [])];
+  const last = closed > 0 ? closed : open;
+  const named = kinds.length > 0 ? `${kinds.join(" and ")} shape${last === 1 ? "" : "s"}` : "";
+  const barres = barre === 0 ? "no barre" : barre === 1 ? "one barre" : `${counted(barre)} barres`;
+  const sentence = named === "" ? barres : `${named}, ${barres}`;
+  return `${sentence.charAt(0).toUpperCase()}${sentence.slice(1)}.`;
+}
+
+function keyInWords(key: KeyName): string {
+  const tonic = glyphs(key.tonic);
+  if (key.mode === "major") return tonic;
+  return `${tonic} ${key.mode}`;
+}
+
+function counted(count: number): string {
+  return (counts[count] ?? `${count}`).toLowerCase();
+}
+
+function plural(count: number, noun: string): string {
+  return count === 1 ? `1 ${noun}` : `${count} ${noun}s`;
+}
+
+function list(names: readonly string[]): string {
+  const unique = [...new Set(names)];
+  return unique.length <= 1 ? unique.join("") : `${unique.slice(0, -1).join(", ")} and ${unique[unique.length - 1]}`;
+}
+
+function kg(lb: number): string {
+  return (lb * kgPerLb).toFixed(1);
+}

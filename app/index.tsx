@@ -1,0 +1,59 @@
+import { useWindowDimensions, View } from "react-native";
+import { HomeLadder } from "@/features/span/HomeLadder";
+import { Heading } from "@/features/ui/Heading";
+import { LinkButton } from "@/features/ui/LinkButton";
+import { Screen } from "@/features/ui/Screen";
+import { Text } from "@/features/ui/Text";
+import { TextLink } from "@/features/ui/TextLink";
+import { sizes } from "@/features/ui/theme";
+import { useLayout } from "@/features/ui/useLayout";
+
+const headline = "Sing a few seconds, and know your key and how to play it.";
+
+function Start({ device }: { device: "phone" | "device" }) {
+  return (
+    <View style={{ gap: 10 }}>
+      <LinkButton href="/voice/sing" icon="mic" label="Sing a few seconds" testID="home-sing" />
+      <Text variant="small" tone="soft" style={{ textAlign: "center" }}>
+        {`The recording stays on this ${device}. `}
+        <TextLink href="/voice/by-hand" testID="home-by-hand">
+          Set notes by hand
+        </TextLink>
+      </Text>
+    </View>
+  );
+}
+
+export default function HomeRoute() {
+  const layout = useLayout();
+  const { width, height } = useWindowDimensions();
+  if (layout === "phone") {
+    return (
+      <Screen title="Larkspan" brand footer={<Start device="phone" />}>
+        <Heading level={1} size={width < 380 ? 30 : 36} focusable style={{ marginTop: 12, marginBottom: 24 }}>
+          {headline}
+        </Heading>
+        <HomeLadder width={Math.min(width, 480) - 2 * sizes.gutterPhone} step={height < 760 || width < 380 ? 12 : 15} />
+      </Screen>
+    );
+  }
+  const wide = layout === "wide";
+  return (
+    <Screen title="Larkspan" brand wide>
+      <View style={{ flexDirection: "row", alignItems: "center", gap: wide ? 72 : 32, flexGrow: 1, flexWrap: "wrap" }}>
+        <View style={{ flexGrow: 1, flexShrink: 1, flexBasis: wide ? 420 : 300, maxWidth: 560, gap: 28 }}>
+          <Heading level={1} size={wide ? 52 : 36} focusable>
+            {headline}
+          </Heading>
+          <Text variant="body" tone="soft" style={{ fontSize: wide ? 18 : 16, lineHeight: wide ? 27 : 23 }}>
+            You hear a song and want to play it, but it lies too high, too low, or under chords your hands do not know yet. Larkspan listens to your voice, looks at the song, and says which key suits you and how to reach it on your instrument.
+          </Text>
+          <View style={{ alignSelf: "flex-start" }}>
+            <Start device="device" />
+          </View>
+        </View>
+        <HomeLadder width={wide ? 560 : 340} step={wide ? 18 : 15} />
+      </View>
+    </Screen>
+  );
+}

@@ -43,12 +43,16 @@ async function main(): Promise<void> {
   const host = env.host.includes(":") ? `[${env.host}]` : env.host;
   say(`Larkspan is ready at ${env.publicOrigin ?? `http://${host}:${port}`}`);
 
+  let stopping = false;
+  // Ctrl-C reaches this process from the terminal and again from the start script.
   const stop = () => {
+    if (stopping) return;
+    stopping = true;
     setTimeout(() => server.closeAllConnections(), patienceMs).unref();
     server.close(() => void dataSource.destroy());
   };
-  process.once("SIGINT", stop);
-  process.once("SIGTERM", stop);
+  process.on("SIGINT", stop);
+  process.on("SIGTERM", stop);
 }
 
 function say(line: string): void {

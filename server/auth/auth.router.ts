@@ -47,7 +47,7 @@ export function authRoutes(api: Api, dataSource: DataSource, { tokenSecret, publ
     res.status(status).json(body);
   };
 
-  api.router.post(/^\/auth\//, sameOrigin(publicOrigin));
+  api.router.use("/auth", sameOrigin(publicOrigin));
 
   api.route(
     {

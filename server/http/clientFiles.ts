@@ -36,14 +36,12 @@ export function clientFiles(directory: string): RequestHandler[] {
     const packed = packedFile(req, index);
     if (packed) res.set("Content-Encoding", packed.encoding);
     // A range or a date of the asker's must not turn a 404 into something else.
-    res
-      .type("html")
-      .sendFile(packed?.file ?? index, {
-        cacheControl: false,
-        acceptRanges: false,
-        etag: status === 200,
-        lastModified: status === 200,
-      });
+    res.type("html").sendFile(packed?.file ?? index, {
+      cacheControl: false,
+      acceptRanges: false,
+      etag: status === 200,
+      lastModified: status === 200,
+    });
   };
 
   return [

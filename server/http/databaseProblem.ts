@@ -7,7 +7,7 @@ interface DriverError {
   detail?: string;
 }
 
-const unreachable = /^(08|57P|53300|ECONN|ENOTFOUND|ETIMEDOUT|EPIPE)/;
+const unreachable = /^(08|57P|3D000|53300|ECONN|ENOTFOUND|ETIMEDOUT|EPIPE)/;
 const timeouts = /timeout|Connection terminated|connection is insecure/i;
 
 /** What a refusal by the database means for the person who asked; null if it is a fault of ours. */

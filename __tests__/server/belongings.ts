@@ -1,0 +1,80 @@
+import { randomUUID } from "node:crypto";
+import type { Decision } from "../../shared/contract/decision";
+import type { OwnInstrument } from "../../shared/contract/instrument";
+import type { Song } from "../../shared/contract/song";
+import type { Take } from "../../shared/contract/take";
+import type { Voice } from "../../shared/contract/voice";
+
+const instant = "2026-11-24T19:20:00.000Z";
+
+export function aVoice(changes: Partial<Voice> = {}): Voice {
+  return { id: randomUUID(), name: "With a cold", byHand: null, createdAt: instant, ...changes };
+}
+
+export function aTake(voiceId: string, changes: Partial<Take> = {}): Take {
+  return {
+    id: randomUUID(),
+    voiceId,
+    sungAt: instant,
+    warmedUp: false,
+    effort: 2,
+    durationS: 11.32,
+    range: { lowMidi: 53.1, highMidi: 71.9 },
+    comfort: { lowMidi: 55, highMidi: 69 },
+    estimate: { lowMidi: 51, highMidi: 74 },
+    tuningCents: -7.5,
+    certainty: 0.82,
+    reasons: ["Heard clearly in 14 of 16 notes."],
+    notes: [{ start: 0.4, end: 1.5, midi: 60.02, steadinessCents: 11, sustained: true, clear: true }],
+    ...changes,
+  };
+}
+
+export function aSong(changes: Partial<Song> = {}): Song {
+  return {
+    id: randomUUID(),
+    title: "Nets in the Loft",
+    chart: "G       D\nNets in the loft, ♯ and ♭",
+    writtenKey: { tonic: "G", mode: "major" },
+    tune: { kind: "melody", notes: [{ start: 0, duration: 1 / 3, midi: 62 }], home: "G" },
+    beatsPerBar: 3,
+    tempo: 92,
+    demo: null,
+    createdAt: instant,
+    ...changes,
+  };
+}
+
+export function aDecision(songId: string, voiceId: string | null, changes: Partial<Decision> = {}): Decision {
+  return {
+    id: randomUUID(),
+    songId,
+    voiceId,
+    tonic: "Bb",
+    shift: -2,
+    score: 91.5,
+    reason: "All of it sits in your comfort band.",
+    instrument: "box-adf",
+    way: { retune: 0, capo: 1, shapeKey: "A" },
+    decidedAt: instant,
+    ...changes,
+  };
+}
+
+export function anInstrument(changes: Partial<OwnInstrument> = {}): OwnInstrument {
+  return {
+    id: randomUUID(),
+    presetId: "banjo",
+    name: "Grandfather's banjo",
+    strings: [
+      { note: "G4", gaugeIn: 0.009, material: "plain-steel", scaleMm: 498.5, startsAtFret: 5 },
+      { note: "D3", gaugeIn: null, material: "unknown" },
+    ],
+    scaleMm: 666.75,
+    frets: 22,
+    capoTo: 7,
+    leftHanded: true,
+    favourite: false,
+    ...changes,
+  };
+}

@@ -1,0 +1,89 @@
+import { randomUUID } from "node:crypto";
+import { mkdtempSync } from "node:fs";
+import { tmpdir } from "node:os";
+import path from "node:path";
+import type { Express } from "express";
+import request, { type Test } from "supertest";
+import type { SessionResponse } from "../../shared/contract/account";
+import { createApp } from "../../server/createApp";
+import { createDataSource } from "../../server/database/dataSource";
+import type { Api } from "../../server/http/api";
+import { createLogger } from "../../server/http/requestLog";
+import { createTestDatabase, type TestDatabase } from "./testDatabase";
+
+export const tokenSecret = "a secret of the tests, long enough for HS256";
+
+/** A password that the contract allows. */
+export const password = "lanterns on the slipway";
+
+type Settings = Parameters<typeof createApp>[2];
+
+export interface TestServer {
+  app: Express;
+  api: Api;
+  database: TestDatabase;
+  close: () => Promise<void>;
+}
+
+/** The real application on a database of its own. */
+export async function startTestServer(settings: Partial<Settings> = {}): Promise<TestServer> {
+  const database = await createTestDatabase();
+  const dataSource = await createDataSource(database.url, () => undefined).initialize();
+  const nothing = mkdtempSync(path.join(tmpdir(), "larkspan-nothing-"));
+  const { app, api } = createApp(dataSource, createLogger("silent"), {
+    tokenSecret,
+    publicOrigin: null,
+    trustProxy: false,
+    staticDir: nothing,
+    ...settings,
+  });
+  const close = async () => {
+    if (dataSource.isInitialized) await dataSource.destroy();
+    await database.drop();
+  };
+  return { app, api, database, close };
+}
+
+/** Somebody with an account of their own. */
+export class Person {
+  private constructor(
+    private readonly app: Express,
+    readonly id: string,
+    readonly email: string,
+    readonly token: string,
+    /** name=value of the refresh cookie */
+    readonly cookie: string,
+  ) {}
+
+  static async signUp(app: Express, email = `${randomUUID()}@orlow-quay.example`): Promise<Person> {
+    const response = await request(app).post("/api/auth/sign-up").send({ email, password }).expect(201);
+    const { account, accessToken } = response.body as SessionResponse;
+    return new Person(app, account.id, email, accessToken, cookieOf(response));
+  }
+
+  get(path: string): Test {
+    return this.asking(request(this.app).get(path));
+  }
+
+  put(path: string, body: object): Test {
+    return this.asking(request(this.app).put(path).send(body));
+  }
+
+  delete(path: string): Test {
+    return this.asking(request(this.app).delete(path));
+  }
+
+  private asking(test: Test): Test {
+    return test.set("Authorization", `Bearer ${this.token}`);
+  }
+}
+
+/** All of Set-Cookie, one string for each cookie. */
+export function setCookies(response: { headers: Record<string, unknown> }): string[] {
+  return (response.headers["set-cookie"] as string[] | undefined) ?? [];
+}
+
+/** name=value of the one cookie that an answer sets. */
+export function cookieOf(response: { headers: Record<string, unknown> }): string {
+  return setCookies(response)[0]?.split(";")[0] ?? "";
+}

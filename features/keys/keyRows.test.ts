@@ -1,5 +1,5 @@
 import type { KeyScore } from "@/shared/keys/keyScore";
-import { commonScale, keyRows, rowOf, sortedRows } from "./keyRows";
+import { commonScale, keyRows, rowOf, sortedRows, spellingIn, wholeVoice } from "./keyRows";
 
 const score = (shift: number, points: number, reserves: { upper: number; lower: number }, beyond = false): KeyScore => ({
   tonic: "C",
@@ -62,5 +62,19 @@ test("a key is found by tonic and move, else by tonic under any name", () => {
 
 test("one scale holds the voice and every row", () => {
   const voice = { range: { lowMidi: 51.3, highMidi: 74 }, comfort: { lowMidi: 55, highMidi: 70 } };
-  expect(commonScale(rows, voice)).toEqual({ lowMidi: 49, highMidi: 78 });
+  expect(commonScale(rows, voice)).toEqual({ low: 49, high: 78 });
+});
+
+test("pictures show the voice on whole semitones", () => {
+  const voice = { range: { lowMidi: 51.3, highMidi: 73.6 }, comfort: { lowMidi: 54.6, highMidi: 70.3 } };
+  expect(wholeVoice(voice)).toEqual({ range: { lowMidi: 51, highMidi: 74 }, comfort: { lowMidi: 55, highMidi: 70 } });
+});
+
+test.each([
+  ["F", "major", "flats"],
+  ["D", "minor", "flats"],
+  ["F#", "minor", "sharps"],
+  ["C", "major", "sharps"],
+] as const)("notes in %s %s are spelled with %s", (tonic, mode, spelling) => {
+  expect(spellingIn({ tonic, mode })).toBe(spelling);
 });

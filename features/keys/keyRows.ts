@@ -1,5 +1,5 @@
 import type { SingingVoice, KeyMark, KeyParts, KeyScore } from "@/shared/keys/keyScore";
-import { type KeyName, tonicPitchClass } from "@/shared/music/keyName";
+import { keyFifths, type KeyName, tonicPitchClass } from "@/shared/music/keyName";
 import { keySign, movedKey } from "@/shared/music/keyWords";
 import { shortMove } from "@/shared/music/moveWords";
 import { glyphs, noteName } from "@/shared/music/pitch";
@@ -92,15 +92,26 @@ export function rowOf(rows: readonly KeyRow[], tonic: string, shift: number | nu
   return same.find((row) => row.shift === shift) ?? same[0] ?? null;
 }
 
-/** Lowest and highest pitch that any row or the voice reaches, with a semitone or two of air: one scale for all. */
-export function commonScale(rows: readonly KeyRow[], voice: SingingVoice): { lowMidi: number; highMidi: number } {
+/** Lowest and highest semitone that any row or the voice reaches, with a little air: one scale for all. */
+export function commonScale(rows: readonly KeyRow[], voice: SingingVoice): { low: number; high: number } {
   const lows = [voice.range.lowMidi, ...rows.map((row) => row.lowMidi)];
   const highs = [voice.range.highMidi, ...rows.map((row) => row.highMidi)];
-  return { lowMidi: Math.floor(Math.min(...lows)) - 2, highMidi: Math.ceil(Math.max(...highs)) + 2 };
+  return { low: Math.round(Math.min(...lows)) - 2, high: Math.round(Math.max(...highs)) + 2 };
+}
+
+/** The voice on the semitones that people read and keys are judged by, so that pictures agree with scores. */
+export function wholeVoice(voice: SingingVoice): SingingVoice {
+  const band = ({ lowMidi, highMidi }: SingingVoice["range"]) => ({ lowMidi: Math.round(lowMidi), highMidi: Math.round(highMidi) });
+  return { range: band(voice.range), comfort: band(voice.comfort) };
+}
+
+/** How notes are spelled in a key. */
+export function spellingIn(key: KeyName): "sharps" | "flats" {
+  return keyFifths(key) < 0 ? "flats" : "sharps";
 }
 
 function spanWords(score: KeyScore, key: KeyName): string {
-  const spelling = key.tonic.includes("b") || key.tonic === "F" ? "flats" : "sharps";
+  const spelling = spellingIn(key);
   return glyphs(`${noteName(score.lowMidi, spelling)} to ${noteName(score.highMidi, spelling)}`);
 }
 

@@ -60,3 +60,16 @@ test("chords without words wrap between chords", () => {
 test("an empty line has no cells", () => {
   expect(chartCells("", [])).toEqual([]);
 });
+
+test("a long gap may wrap and still holds its columns", () => {
+  const cells = chartCells(" ".repeat(40), [{ column: 30, text: "D" }]);
+  expect(Math.max(...cells.map((cell) => cell.width))).toBeLessThan(12);
+  expect(cells.reduce((sum, cell) => sum + cell.width, 0)).toBe(40);
+  let start = 0;
+  const columns = cells.flatMap((cell) => {
+    const found = cell.chords.map((chord) => start + chord.column);
+    start += cell.width;
+    return found;
+  });
+  expect(columns).toEqual([30]);
+});

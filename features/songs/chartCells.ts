@@ -38,14 +38,18 @@ export function chartCells(lyrics: string, chords: readonly PlacedChord[]): Char
   return cells;
 }
 
-/** Columns behind which the line may wrap: before a word, or before a chord over blanks, never inside a chord. */
+/** Blanks in a row that stay together; more may wrap, so that a long gap never pushes a page wide. */
+const gap = 8;
+
+/** Columns behind which the line may wrap: before a word, before a chord over blanks, in a long gap, never inside a chord. */
 function breaks(line: string, chords: readonly PlacedChord[]): number[] {
   const stops: number[] = [];
   for (let column = 1; column < line.length; column++) {
     const wordStarts = line[column] !== " " && line[column - 1] === " ";
     const chordOverBlanks = line[column] === " " && line[column - 1] === " " && chords.some((chord) => chord.column === column);
+    const inLongGap = column >= gap && line.slice(column - gap, column + 1).trim() === "" && column - (stops.at(-1) ?? 0) >= gap;
     const insideChord = chords.some((chord) => chord.column < column && chord.column + chord.text.length >= column);
-    if ((wordStarts || chordOverBlanks) && !insideChord) stops.push(column);
+    if ((wordStarts || chordOverBlanks || inLongGap) && !insideChord) stops.push(column);
   }
   if (line.length > 0) stops.push(line.length);
   return stops;

@@ -1,0 +1,66 @@
+import type { OwnInstrument } from "@/shared/contract/instrument";
+import type { Instrument } from "@/shared/instruments/instrument";
+import { presets } from "@/shared/instruments/presets";
+import { glyphs } from "@/shared/music/pitch";
+
+/** What is played until somebody says what they play. */
+const firstOffered = "box-adf";
+
+/** An instrument to choose: a preset, or one's own. */
+export interface OfferedInstrument {
+  instrument: Instrument;
+  own: OwnInstrument | null;
+}
+
+/** Own instruments as the engine wants them; the id of the preset stands for the one taken from it. */
+export function instrumentOf(own: OwnInstrument): Instrument {
+  const { presetId, favourite, fretMap, ...rest } = own;
+  return { ...rest, id: presetId ?? own.id, ...(fretMap === undefined ? null : { fretMap }) };
+}
+
+/** All presets, each in the state that its owner gave it, and behind them what belongs to no preset. */
+export function offeredInstruments(owned: readonly OwnInstrument[]): OfferedInstrument[] {
+  const fromPresets = presets.map((preset) => {
+    const own = owned.find((each) => each.presetId === preset.id) ?? null;
+    return { instrument: own ? instrumentOf(own) : preset, own };
+  });
+  const others = owned.filter((own) => !presets.some((preset) => preset.id === own.presetId));
+  return [...fromPresets, ...others.map((own) => ({ instrument: instrumentOf(own), own }))];
+}
+
+/** The instrument of an id; the favourite, or else the first offered, where the id is unknown or null. */
+export function chosenInstrument(owned: readonly OwnInstrument[], id: string | null): Instrument {
+  const offered = offeredInstruments(owned);
+  const found =
+    offered.find(({ instrument }) => instrument.id === id) ??
+    offered.find(({ own }) => own?.favourite === true) ??
+    offered.find(({ instrument }) => instrument.id === firstOffered) ??
+    offered[0];
+  if (!found) throw new RangeError("there are no instruments");
+  return found.instrument;
+}
+
+/** What has to be kept so that one instrument is the favourite and no other is. */
+export function makeFavourite(owned: readonly OwnInstrument[], id: string, newId: () => string): OwnInstrument[] {
+  const before = owned.filter((own) => own.favourite && instrumentOf(own).id !== id).map((own) => ({ ...own, favourite: false }));
+  const own = ownedAs(owned, id, newId);
+  return own.favourite && owned.includes(own) ? before : [...before, { ...own, favourite: true }];
+}
+
+/** The same instrument for the other hand. */
+export function turnHand(owned: readonly OwnInstrument[], id: string, leftHanded: boolean, newId: () => string): OwnInstrument {
+  return { ...ownedAs(owned, id, newId), leftHanded };
+}
+
+/** One's own of that id; a copy of the preset where there is none yet. */
+export function ownedAs(owned: readonly OwnInstrument[], id: string, newId: () => string): OwnInstrument {
+  const own = owned.find((each) => instrumentOf(each).id === id);
+  if (own) return own;
+  const { fretMap, ...preset } = chosenInstrument(owned, id);
+  return { ...preset, id: newId(), presetId: preset.id, favourite: false, ...(fretMap === undefined ? null : { fretMap }) };
+}
+
+/** The strings by name, "A D F♯"; with octaves where asked. */
+export function stringWords(instrument: Instrument, octaves = false): string {
+  return instrument.strings.map(({ note }) => glyphs(octaves ? note : note.replace(/-?\d+$/, ""))).join(" ");
+}

@@ -1,0 +1,63 @@
+import type { Decision } from "@/shared/contract/decision";
+import type { Song } from "@/shared/contract/song";
+import type { SingingVoice } from "@/shared/keys/keyScore";
+import { scoreKeys } from "@/shared/keys/scoreKeys";
+import { parseChord, transposeChord } from "@/shared/music/chord";
+import { type KeyName, tonicPitchClass } from "@/shared/music/keyName";
+import { chartChords, parseChart } from "@/shared/songs/chart";
+import { stillFits } from "./decide";
+import { keyRows, rowOf, type KeyRow } from "./keyRows";
+
+/** How many chords a row shows. */
+const chordsShown = 4;
+
+/** The key that the chart is in; the tune's home note where there is no key. */
+export function writtenKeyOf(song: Pick<Song, "writtenKey" | "tune">): KeyName | null {
+  if (song.writtenKey) return song.writtenKey;
+  return song.tune ? { tonic: song.tune.home, mode: "major" } : null;
+}
+
+/** The song's chords as written, each once. */
+export function songChords(song: Pick<Song, "chart">): string[] {
+  return chartChords(parseChart(song.chart));
+}
+
+/** Chords moved into a key. */
+export function chordsIn(chords: readonly string[], from: KeyName, to: KeyName): string[] {
+  const semitones = (tonicPitchClass(to.tonic) - tonicPitchClass(from.tonic) + 12) % 12;
+  return chords.flatMap((text) => {
+    const chord = parseChord(text);
+    return chord ? [transposeChord(chord, semitones, to, from)] : [];
+  });
+}
+
+/** All twelve keys of a song for a voice, best first; null while the tune or the voice is not known. */
+export function keyRowsOf(song: Song, singing: SingingVoice | null): KeyRow[] | null {
+  const written = writtenKeyOf(song);
+  if (!song.tune || !singing || !written) return null;
+  const chords = songChords(song).slice(0, chordsShown);
+  const scores = scoreKeys(song.tune, singing, { mode: written.mode, presentKey: written.tonic });
+  return keyRows(scores, written, (key) => chordsIn(chords, written, key));
+}
+
+/** The key that a page speaks of, and how it came to that. */
+export interface KeyInHand {
+  key: KeyName;
+  /** semitones from the tune as written, octave included */
+  shift: number;
+  row: KeyRow | null;
+  because: "decided" | "best" | "written";
+}
+
+/** The key decided for a song, else the best for the voice, else the written one; null where no key is known at all. */
+export function keyInHand(song: Song, rows: readonly KeyRow[] | null, decision: Decision | null): KeyInHand | null {
+  const written = writtenKeyOf(song);
+  if (!written) return null;
+  if (decision && stillFits(decision, written)) {
+    const row = rows ? rowOf(rows, decision.tonic, decision.shift) : null;
+    return { key: { tonic: decision.tonic, mode: written.mode }, shift: decision.shift, row, because: "decided" };
+  }
+  const best = rows?.[0];
+  if (best) return { key: best.key, shift: best.shift, row: best, because: "best" };
+  return { key: written, shift: 0, row: null, because: "written" };
+}

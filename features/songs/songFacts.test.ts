@@ -1,0 +1,39 @@
+import type { Song } from "@/shared/contract/song";
+import { beatWords, headWords, songFacts, songsNamed } from "./songFacts";
+
+const song = (title: string, chart: string, change: Partial<Song> = {}): Song => ({
+  id: title,
+  title,
+  chart,
+  writtenKey: { tonic: "Bb", mode: "minor" },
+  tune: null,
+  beatsPerBar: 3,
+  tempo: 92,
+  demo: null,
+  createdAt: "2026-03-05T19:00:00.000Z",
+  ...change,
+});
+const shelf = [song("Slack Water", "Low tide"), song("Étoile", "the water is wide"), song("Gulls", "over the bar")];
+
+test.each([
+  ["water", ["Slack Water", "Étoile"]],
+  ["etoile", ["Étoile"]],
+  ["  BAR  the ", ["Gulls"]],
+  ["", ["Slack Water", "Étoile", "Gulls"]],
+  ["anchor", []],
+])("searching %j finds titles first, then words", (search, titles) => {
+  expect(songsNamed(shelf, search).map((each) => each.title)).toEqual(titles);
+});
+
+test("a song's facts", () => {
+  expect(songFacts(shelf[0]!)).toEqual({ sign: "B♭m", line: "Written in B♭m, no melody yet." });
+  expect(songFacts(song("x", "", { writtenKey: null, demo: "ferry" })).line).toBe("No key yet, a song to try Larkspan with, no melody yet.");
+});
+
+test("beat and tempo in words", () => {
+  expect(beatWords(shelf[0]!)).toBe("3 beats, 92");
+  expect(beatWords({ beatsPerBar: 1, tempo: null })).toBe("1 beat");
+  expect(beatWords({ beatsPerBar: null, tempo: null })).toBeNull();
+  expect(headWords(shelf[0]!)).toBe("Written in B♭ minor · 3 beats in a bar, 92 a minute");
+  expect(headWords(song("x", "", { beatsPerBar: null, tempo: null }))).toBe("Written in B♭ minor");
+});

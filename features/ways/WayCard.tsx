@@ -1,0 +1,96 @@
+import { useId } from "react";
+import { Pressable, View } from "react-native";
+import { ChordGrid } from "@/features/ui/ChordGrid";
+import { Icon } from "@/features/ui/Icon";
+import { RadioDot } from "@/features/ui/RadioDot";
+import { Text } from "@/features/ui/Text";
+import { colors } from "@/features/ui/theme";
+import { webProps, webStyle } from "@/features/ui/webStyle";
+import type { Instrument } from "@/shared/instruments/instrument";
+import { glyphs } from "@/shared/music/pitch";
+import type { Way, WayChord } from "@/shared/ways/way";
+
+export interface WayCardProps {
+  way: Way;
+  instrument: Instrument;
+  chosen: boolean;
+  /** keyboard and focus of this one button of the group */
+  radio: object;
+  onChoose: () => void;
+}
+
+/** One way: what to do, what it costs, the shapes, and what to take care of. */
+export function WayCard({ way, instrument, chosen, radio, onChoose }: WayCardProps) {
+  const id = useId();
+  const moved = way.retune !== 0 || way.capo !== 0;
+  return (
+    <>
+      <Pressable
+        role="radio"
+        aria-checked={chosen}
+        aria-labelledby={`${id}-title`}
+        onPress={onChoose}
+        {...webProps({ ...radio, "aria-describedby": `${id}-cost` })}
+        style={{ flexDirection: "row", gap: 12, justifyContent: "space-between", minHeight: 44 }}
+      >
+        <View style={{ flexShrink: 1 }}>
+          <Text variant="strong" nativeID={`${id}-title`} style={{ lineHeight: 20 }}>
+            {glyphs(way.title)}
+          </Text>
+          <Text variant="small" tone="soft" nativeID={`${id}-cost`} style={{ lineHeight: 19, marginTop: 2 }}>
+            {glyphs(way.cost)}
+          </Text>
+        </View>
+        <RadioDot on={chosen} />
+      </Pressable>
+      <View style={webStyle({ display: "grid", gridTemplateColumns: "repeat(auto-fill, minmax(72px, 1fr))", rowGap: 10, marginTop: 6 })}>
+        {way.chords.map((chord) => (
+          <Grid key={chord.written} chord={chord} way={way} instrument={instrument} moved={moved} />
+        ))}
+      </View>
+      {way.cautions.length > 0 && <Cautions texts={way.cautions} />}
+    </>
+  );
+}
+
+function Grid({ chord, way, instrument, moved }: { chord: WayChord; way: Way; instrument: Instrument; moved: boolean }) {
+  const sounds = moved ? { sounds: glyphs(chord.sounding) } : null;
+  if (chord.shape)
+    return (
+      <View style={{ alignItems: "center" }}>
+        <ChordGrid
+          name={glyphs(chord.played)}
+          shape={chord.shape}
+          strings={instrument.strings.length}
+          capo={way.capo}
+          leftHanded={instrument.leftHanded}
+          {...sounds}
+        />
+      </View>
+    );
+  return (
+    <View style={{ alignItems: "center", gap: 6 }}>
+      <Text variant="monoBold" style={{ fontSize: 14, lineHeight: 18 }}>
+        {glyphs(chord.played)}
+      </Text>
+      <Text variant="tiny" tone="brick" style={{ textAlign: "center" }}>
+        No shape on this instrument
+      </Text>
+    </View>
+  );
+}
+
+function Cautions({ texts }: { texts: readonly string[] }) {
+  return (
+    <View style={{ borderTopWidth: 1, borderColor: colors.line, marginTop: 8, paddingTop: 8, gap: 6 }}>
+      {texts.map((text) => (
+        <View key={text} style={{ flexDirection: "row", gap: 8 }}>
+          <Icon name="warning" size={20} color={colors.honeyText} />
+          <Text variant="tiny" style={{ flexShrink: 1 }}>
+            {glyphs(text)}
+          </Text>
+        </View>
+      ))}
+    </View>
+  );
+}

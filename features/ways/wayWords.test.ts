@@ -1,0 +1,45 @@
+import type { Way } from "@/shared/ways/way";
+import { difficultyWord, shortCost, shortWay, takeLabel, wayKept } from "./wayWords";
+
+const way = (retune: number, capo: number, shapeKey: string): Way => ({
+  kind: "as-is",
+  retune,
+  capo,
+  shapeKey,
+  soundingKey: "C",
+  chords: [],
+  difficulty: 0.2,
+  strings: ["A3", "D4", "F#4"].map((from) => ({ from, to: retune === 0 ? from : "X", beforeLb: null, afterLb: null, verdict: "fine" })),
+  title: "",
+  cost: "",
+  cautions: [],
+  why: "",
+});
+
+test.each([
+  [way(0, 0, "C"), "Use it as tuned", "As tuned, shapes of C"],
+  [way(0, 3, "A"), "Use capo 3", "Capo 3, shapes of A"],
+  [way(-2, 0, "D"), "Use this tuning", "Retuned 2 down, shapes of D"],
+  [way(-1, 1, "Bb"), "Use this tuning and capo 1", "Retuned 1 down, capo 1, shapes of B♭"],
+  [way(1, 0, "F#"), "Use this tuning", "Retuned 1 up, shapes of F♯"],
+])("%# has its words", (each, label, short) => {
+  expect([takeLabel(each), shortWay(each)]).toEqual([label, short]);
+});
+
+test("the cost says how hard it is and what is retuned", () => {
+  expect(shortCost(way(0, 3, "A"))).toBe("easy, nothing retuned");
+  expect(shortCost({ ...way(-2, 0, "D"), difficulty: 0.5 })).toBe("some work, 3 strings retuned");
+  const chord = { sounding: "C", written: "D", played: "A", shape: null };
+  expect(shortCost({ ...way(0, 0, "C"), chords: [chord, chord] })).toBe("no shape for 2 of 2 chords");
+});
+
+test("difficulty has three words", () => {
+  expect([0, 0.34, 0.67, 1].map(difficultyWord)).toEqual(["easy", "some work", "hard", "hard"]);
+});
+
+test("a kept way is found again only if it is still there", () => {
+  const ways = [way(0, 0, "C"), way(0, 3, "A")];
+  expect(wayKept(ways, { retune: 0, capo: 3, shapeKey: "A" })).toBe(ways[1]);
+  expect(wayKept(ways, { retune: 0, capo: 5, shapeKey: "G" })).toBeNull();
+  expect(wayKept(ways, null)).toBeNull();
+});

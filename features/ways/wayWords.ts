@@ -1,0 +1,39 @@
+import { glyphs } from "@/shared/music/pitch";
+import type { Way } from "@/shared/ways/way";
+
+type Moves = Pick<Way, "kind" | "retune" | "capo" | "shapeKey">;
+
+/** What the button under the ways does. */
+export function takeLabel({ retune, capo }: Moves): string {
+  if (retune === 0) return capo === 0 ? "Use it as tuned" : `Use capo ${capo}`;
+  return capo === 0 ? "Use this tuning" : `Use this tuning and capo ${capo}`;
+}
+
+/** A way in the few words that a table row has room for. */
+export function shortWay({ retune, capo, shapeKey }: Moves): string {
+  const shapes = `shapes of ${glyphs(shapeKey)}`;
+  const retuned = `${Math.abs(retune)} ${retune < 0 ? "down" : "up"}`;
+  if (retune === 0) return capo === 0 ? `As tuned, ${shapes}` : `Capo ${capo}, ${shapes}`;
+  return capo === 0 ? `Retuned ${retuned}, ${shapes}` : `Retuned ${retuned}, capo ${capo}, ${shapes}`;
+}
+
+/** How hard, in a word. */
+export function difficultyWord(difficulty: number): string {
+  if (difficulty < 0.34) return "easy";
+  return difficulty < 0.67 ? "some work" : "hard";
+}
+
+/** What a way asks for, beneath its short form. */
+export function shortCost(way: Pick<Way, "difficulty" | "retune" | "strings" | "chords">): string {
+  const missing = way.chords.filter((chord) => chord.shape === null).length;
+  if (missing > 0) return `no shape for ${missing} of ${way.chords.length} chords`;
+  const changed = way.strings.filter((string) => string.from !== string.to).length;
+  const retuned = changed === 0 ? "nothing retuned" : `${changed} ${changed === 1 ? "string" : "strings"} retuned`;
+  return `${difficultyWord(way.difficulty)}, ${retuned}`;
+}
+
+/** The way that was kept with a decision, among those found now. */
+export function wayKept(ways: readonly Way[], kept: Pick<Way, "retune" | "capo" | "shapeKey"> | null): Way | null {
+  if (kept === null) return null;
+  return ways.find((way) => way.retune === kept.retune && way.capo === kept.capo && way.shapeKey === kept.shapeKey) ?? null;
+}

@@ -25,6 +25,11 @@ export function useRecorder(): Recorder {
   const [restoring, setRestoring] = useState(() => takeOfThisTab() !== null);
   const [live] = useState(createLiveSound);
   const capture = useRef<Capture | null>(null);
+  const { step } = state;
+  const stepNow = useRef(step);
+  useEffect(() => {
+    stepNow.current = step;
+  }, [step]);
 
   useEffect(() => {
     const own = createCapture(dispatch, live);
@@ -35,10 +40,11 @@ export function useRecorder(): Recorder {
       here = false;
       own.close();
       capture.current = null;
+      // Leaving the page gives a take up that is still being sung; a result waits for whoever comes back.
+      if (stepNow.current === "listening" || stepNow.current === "stopping" || stepNow.current === "judging") forget();
     };
   }, [live]);
 
-  const { step } = state;
   useEffect(() => {
     if (step === "asking") void capture.current?.start();
     if (step === "stopping") void capture.current?.stop();

@@ -1,0 +1,8 @@
+import { useLocalSearchParams, useRouter } from "expo-router";
+import { ByHandScreen } from "@/features/voice/ByHandScreen";
+
+export default function ByHandRoute() {
+  const { voice } = useLocalSearchParams<{ voice?: string }>();
+  const router = useRouter();
+  return <ByHandScreen voiceId={voice} onKept={() => router.replace("/voice")} />;
+}

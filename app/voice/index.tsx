@@ -1,0 +1,5 @@
+import { VoiceScreen } from "@/features/voice/VoiceScreen";
+
+export default function VoiceRoute() {
+  return <VoiceScreen />;
+}

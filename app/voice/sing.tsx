@@ -1,0 +1,7 @@
+import { useRouter } from "expo-router";
+import { SingScreen } from "@/features/voice/SingScreen";
+
+export default function SingRoute() {
+  const router = useRouter();
+  return <SingScreen onKept={() => router.replace("/voice")} />;
+}

@@ -1,0 +1,131 @@
+import { useState } from "react";
+import { Controller, useForm, type Resolver } from "react-hook-form";
+import { View } from "react-native";
+import { Button } from "@/features/ui/Button";
+import { Field } from "@/features/ui/Field";
+import { Form } from "@/features/ui/Form";
+import { IconButton } from "@/features/ui/IconButton";
+import { Notice } from "@/features/ui/Notice";
+import { Text } from "@/features/ui/Text";
+import { parseNoteName, plainAccidentals } from "@/shared/music/pitch";
+import type { SingingVoice } from "@/shared/keys/keyScore";
+import { readByHand, usualComfort, type ByHandFields } from "./byHand";
+import { NoteLadder } from "./NoteLadder";
+import { noteWord } from "./noteWords";
+
+export interface ByHandFormProps {
+  /** what the voice has now, to start from */
+  voice: SingingVoice | null;
+  busy: boolean;
+  /** why keeping failed, in words */
+  refusal: string | null;
+  onKeep: (voice: SingingVoice) => void;
+}
+
+const rows: readonly { name: keyof ByHandFields; label: string; hint: string }[] = [
+  { name: "lowest", label: "Lowest note", hint: "The lowest you can hold" },
+  { name: "highest", label: "Highest note", hint: "The highest you can hold" },
+  { name: "comfortLow", label: "Comfort low (optional)", hint: "The lowest you sing gladly" },
+  { name: "comfortTop", label: "Comfort top (optional)", hint: "The highest you sing gladly" },
+];
+
+const resolver: Resolver<ByHandFields> = (values) => {
+  const reading = readByHand(values);
+  if (reading.ok) return { values, errors: {} };
+  return {
+    values: {},
+    errors: Object.fromEntries(Object.entries(reading.errors).map(([name, message]) => [name, { type: "note", message }])),
+  };
+};
+
+/** The four notes of a voice, typed or tapped. What was typed stays, also where it is wrong. */
+export function ByHandForm({ voice, busy, refusal, onKeep }: ByHandFormProps) {
+  const { control, handleSubmit, setValue, getValues, watch, trigger, formState } = useForm<ByHandFields>({
+    defaultValues: fieldsOf(voice),
+    resolver,
+    mode: "onTouched",
+  });
+  const [active, setActive] = useState<keyof ByHandFields>("lowest");
+  const values = watch();
+  const set = (name: keyof ByHandFields, midi: number) => {
+    setValue(name, noteWord(midi), { shouldDirty: true });
+    if (formState.isSubmitted || formState.errors[name]) void trigger();
+  };
+  const step = (name: keyof ByHandFields, by: number) => set(name, (parseNoteName(getValues(name)) ?? startOf(name, values)) + by);
+  const keep = handleSubmit((typed) => {
+    const reading = readByHand(typed);
+    if (reading.ok) onKeep(reading.voice);
+  });
+  return (
+    <Form label="Notes of your voice" onSubmit={() => void keep()} gap={20}>
+      {rows.map(({ name, label, hint }) => (
+        <Controller
+          key={name}
+          control={control}
+          name={name}
+          render={({ field, fieldState }) => (
+            <View style={{ flexDirection: "row", alignItems: "flex-start", gap: 4 }}>
+              <View style={{ flexGrow: 1, flexShrink: 1 }}>
+                <Field
+                  label={label}
+                  hint={hintFor(name, hint, values)}
+                  value={field.value}
+                  onChangeText={field.onChange}
+                  onBlur={field.onBlur}
+                  error={fieldState.error?.message}
+                  testID={`by-hand-${name}`}
+                />
+              </View>
+              <View style={{ flexDirection: "row", marginTop: 26 }}>
+                <IconButton icon="minus" label={`${label}: a semitone lower`} onPress={() => step(name, -1)} />
+                <IconButton icon="plus" label={`${label}: a semitone higher`} onPress={() => step(name, 1)} />
+              </View>
+            </View>
+          )}
+        />
+      ))}
+      <NoteLadder values={values} active={active} onActive={setActive} onNote={(midi) => set(active, midi)} />
+      {refusal !== null && (
+        <Notice kind="error" title="Not kept">
+          {refusal}
+        </Notice>
+      )}
+      <Button submit label="Keep these notes" busy={busy} onPress={() => undefined} testID="by-hand-keep" />
+      <Text variant="small" tone="soft">
+        Type a letter and an octave: C4 is the C in the middle of a piano. Singing a few seconds finds the same notes for you.
+      </Text>
+    </Form>
+  );
+}
+
+function fieldsOf(voice: SingingVoice | null): ByHandFields {
+  if (!voice) return { lowest: "", highest: "", comfortLow: "", comfortTop: "" };
+  const { range, comfort } = voice;
+  return {
+    lowest: noteWord(range.lowMidi),
+    highest: noteWord(range.highMidi),
+    comfortLow: noteWord(comfort.lowMidi),
+    comfortTop: noteWord(comfort.highMidi),
+  };
+}
+
+/** Where + and - begin in an empty field: near the notes that are there, else around the middle C. */
+function startOf(name: keyof ByHandFields, values: ByHandFields): number {
+  const low = parseNoteName(values.lowest);
+  const high = parseNoteName(values.highest);
+  if (low !== null && high !== null && low < high) {
+    const usual = usualComfort(low, high);
+    return name === "comfortLow" || name === "lowest" ? usual.lowMidi : usual.highMidi;
+  }
+  if (name === "highest" || name === "comfortTop") return low === null ? 72 : low + 19;
+  return high === null ? 55 : high - 19;
+}
+
+function hintFor(name: keyof ByHandFields, hint: string, values: ByHandFields): string {
+  const low = parseNoteName(plainAccidentals(values.lowest));
+  const high = parseNoteName(plainAccidentals(values.highest));
+  if (low === null || high === null || low >= high || values[name] !== "") return hint;
+  const usual = usualComfort(low, high);
+  if (name === "comfortLow") return `${hint}; ${noteWord(usual.lowMidi)} is assumed`;
+  return name === "comfortTop" ? `${hint}; ${noteWord(usual.highMidi)} is assumed` : hint;
+}

@@ -1,0 +1,150 @@
+import { useEffect, useRef, useState } from "react";
+import { Pressable, useWindowDimensions, View } from "react-native";
+import { LevelMeter } from "@/features/span/LevelMeter";
+import { PitchTrail, TrailLegend } from "@/features/span/PitchTrail";
+import { Icon } from "@/features/ui/Icon";
+import { Screen } from "@/features/ui/Screen";
+import { Text } from "@/features/ui/Text";
+import { colors, mixtures, sizes } from "@/features/ui/theme";
+import { useLayout } from "@/features/ui/useLayout";
+import { noteNow } from "./noteNow";
+import { noteWord } from "./noteWords";
+import { timeOf, type LiveSound } from "./recorder/liveSound";
+import { enoughTakeS, longestTakeS } from "./recorder/takeProtocol";
+import { useDrawTick } from "./useDrawTick";
+
+export interface ListeningScreenProps {
+  live: LiveSound;
+  seconds: number;
+  stopping: boolean;
+  onStop: () => void;
+}
+
+/** Room for the head, the note, level, time and Stop; the trail has what is left. */
+const aroundTrail = 56 + 72 + 232;
+
+/** While singing: the note, the trail, how loud and how long, and Stop under the thumb. */
+export function ListeningScreen({ live, seconds, stopping, onStop }: ListeningScreenProps) {
+  const phone = useLayout() === "phone";
+  const { height } = useWindowDimensions();
+  return (
+    <Screen title="Listening" subtitle="Any song you know, no instrument" back="/voice" closes hideBar wide>
+      <NoteWords live={live} />
+      <View style={{ marginTop: 12, marginHorizontal: phone ? -sizes.gutterPhone : 0 }}>
+        <LiveTrail live={live} height={Math.max(220, Math.min(560, height - aroundTrail - (phone ? 0 : 40)))} />
+      </View>
+      <View style={{ gap: 14, paddingTop: 16, paddingBottom: 12, maxWidth: phone ? undefined : 560, width: "100%", marginTop: "auto" }}>
+        <LiveLevel live={live} />
+        <TimeRow seconds={seconds} />
+        <Text variant="small" tone="soft" style={{ marginTop: -6, paddingLeft: 56 }}>
+          {`${enoughTakeS} s is enough. More is surer, up to ${longestTakeS} s.`}
+        </Text>
+        <StopButton stopping={stopping} onStop={onStop} />
+      </View>
+    </Screen>
+  );
+}
+
+function NoteWords({ live }: { live: LiveSound }) {
+  useDrawTick(100);
+  const note = noteNow(live.frames);
+  return (
+    <View style={{ flexDirection: "row", alignItems: "center", gap: 16, paddingTop: 8, minHeight: 60 }}>
+      <Text variant="number" style={{ lineHeight: 52, letterSpacing: -1, minWidth: 64 }} testID="note-now" aria-hidden={note === null}>
+        {note ? noteWord(note.midi) : "–"}
+      </Text>
+      <View style={{ flexGrow: 1, flexShrink: 1 }}>
+        <Text variant="small" tone={note?.words === "On the line" ? "lagoon" : "ink"} style={{ fontWeight: "600" }}>
+          {note?.words ?? "Sing when you are ready"}
+        </Text>
+        <Text variant="small" tone="soft">
+          {note ? `held ${note.heldS.toFixed(1)} s` : " "}
+        </Text>
+      </View>
+      <TrailLegend />
+    </View>
+  );
+}
+
+function LiveTrail({ live, height }: { live: LiveSound; height: number }) {
+  const nowMs = useDrawTick();
+  const [width, setWidth] = useState(0);
+  return (
+    <View onLayout={({ nativeEvent }) => setWidth(nativeEvent.layout.width)} style={{ height }}>
+      {width > 0 && <PitchTrail frames={live.frames} now={timeOf(live, nowMs)} width={width} height={height} testID="pitch-trail" />}
+    </View>
+  );
+}
+
+function LiveLevel({ live }: { live: LiveSound }) {
+  useDrawTick(100);
+  // A cut-off peak is too loud, however soft the block around it.
+  return <LevelMeter levelDb={live.peak >= 0.99 ? 0 : live.levelDb} />;
+}
+
+function TimeRow({ seconds }: { seconds: number }) {
+  const words = `${Math.floor(seconds)} of ${longestTakeS} seconds; ${enoughTakeS} are enough`;
+  return (
+    <View style={{ flexDirection: "row", alignItems: "center", gap: 12 }}>
+      <Text variant="small" tone="soft" style={{ width: 44 }}>
+        Time
+      </Text>
+      <View role="img" aria-label={words} style={{ flexGrow: 1, flexShrink: 1, height: 8, borderRadius: 4, borderWidth: 1, borderColor: mixtures.rungC }}>
+        <View
+          style={{
+            position: "absolute",
+            top: -1,
+            bottom: -1,
+            left: -1,
+            width: `${(100 * seconds) / longestTakeS}%`,
+            borderRadius: 4,
+            backgroundColor: colors.plum,
+          }}
+        />
+        <View
+          style={{
+            position: "absolute",
+            top: -6,
+            bottom: -6,
+            left: `${(100 * enoughTakeS) / longestTakeS}%`,
+            width: 2,
+            borderRadius: 1,
+            backgroundColor: colors.ink,
+          }}
+        />
+      </View>
+      <Text variant="small" style={{ fontWeight: "600", width: 64, textAlign: "right" }} testID="take-seconds">
+        {`${Math.floor(seconds)} s`}
+      </Text>
+    </View>
+  );
+}
+
+/** It has the focus while listening, so that Space or Enter ends the take. */
+function StopButton({ stopping, onStop }: { stopping: boolean; onStop: () => void }) {
+  const button = useRef<View>(null);
+  useEffect(() => button.current?.focus(), []);
+  return (
+    <Pressable
+      ref={button}
+      role="button"
+      onPress={onStop}
+      disabled={stopping}
+      testID="sing-stop"
+      style={{
+        height: 64,
+        borderRadius: sizes.radius,
+        backgroundColor: colors.plum,
+        flexDirection: "row",
+        alignItems: "center",
+        justifyContent: "center",
+        gap: 10,
+      }}
+    >
+      <Icon name="stop" size={26} color={colors.onPlum} />
+      <Text variant="strong" tone="onPlum" style={{ fontSize: 20, lineHeight: 24 }}>
+        {stopping ? "Stopping" : "Stop"}
+      </Text>
+    </Pressable>
+  );
+}

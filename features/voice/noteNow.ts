@@ -1,0 +1,50 @@
+import { hzToMidi } from "@/shared/music/pitch";
+import type { LiveFrame } from "@/shared/voice/liveTracker";
+
+/** The note that sounds now. */
+export interface NoteNow {
+  /** nearest semitone */
+  midi: number;
+  /** cents above (+) or below (-) it */
+  cents: number;
+  heldS: number;
+  words: "On the line" | "A little flat" | "Flat" | "A little sharp" | "Sharp";
+}
+
+/** A breath or a consonant this short does not end a note. */
+const gapFrames = 8;
+const sameNoteSemitones = 0.6;
+const recentFrames = 20;
+
+/**
+ * What is being sung at the end of `frames` (one per 10 ms), or null where nobody sings. Vibrato and a short breath do
+ * not end a note: its pitch is the median of the last 0.2 s, and it is held as long as pitch stays within 60 cents.
+ */
+export function noteNow(frames: readonly LiveFrame[]): NoteNow | null {
+  const recent = frames.slice(-recentFrames).flatMap(({ hz }) => (hz === null ? [] : [hzToMidi(hz)]));
+  const last = frames.slice(-gapFrames).some(({ hz }) => hz !== null);
+  const centre = median(recent);
+  if (!last || centre === null) return null;
+  let held = 0;
+  let gap = 0;
+  for (let k = frames.length - 1; k >= 0; k -= 1) {
+    const hz = frames[k]?.hz ?? null;
+    if (hz === null || Math.abs(hzToMidi(hz) - centre) > sameNoteSemitones) gap += 1;
+    else gap = 0;
+    if (gap > gapFrames) break;
+    held += 1;
+  }
+  const midi = Math.round(centre);
+  const cents = Math.round(100 * (centre - midi));
+  return { midi, cents, heldS: Math.max(0, held - gap) / 100, words: wordsFor(cents) };
+}
+
+function wordsFor(cents: number): NoteNow["words"] {
+  if (Math.abs(cents) <= 15) return "On the line";
+  if (cents < 0) return cents < -30 ? "Flat" : "A little flat";
+  return cents > 30 ? "Sharp" : "A little sharp";
+}
+
+function median(values: readonly number[]): number | null {
+  return [...values].sort((a, b) => a - b)[values.length >> 1] ?? null;
+}

@@ -1,0 +1,31 @@
+import type { Take } from "@/shared/contract/take";
+import type { Voice } from "@/shared/contract/voice";
+import type { SingingVoice } from "@/shared/keys/keyScore";
+import { mergeTakes, type ProfileTake, type VoiceProfile } from "@/shared/voice/voiceProfile";
+import type { PitchBand } from "@/shared/voice/takeReport";
+import { inTune } from "./takeOfHeard";
+
+/** What the takes of one voice say together; null where it has none. Takes of other voices are left out. */
+export function profileOf(voice: Pick<Voice, "id">, takes: readonly Take[]): VoiceProfile | null {
+  const own = takes.filter((take) => take.voiceId === voice.id);
+  return own.length === 0 ? null : mergeTakes(own.map(profileTake));
+}
+
+/** The voice as the key scorer needs it: notes set by hand, else what the takes say, else null. Comfort lies inside range. */
+export function singingVoiceOf(voice: Voice, takes: readonly Take[]): SingingVoice | null {
+  const known = voice.byHand ?? profileOf(voice, takes);
+  if (!known) return null;
+  const range = { lowMidi: known.range.lowMidi, highMidi: known.range.highMidi };
+  return { range, comfort: within(known.comfort, range) };
+}
+
+function profileTake(take: Take): ProfileTake {
+  const { id, sungAt, certainty, effort, tuningCents } = take;
+  const band = (sung: PitchBand) => inTune(sung, tuningCents);
+  return { id, sungAt, certainty, effort, range: band(take.range), comfort: band(take.comfort), estimate: band(take.estimate) };
+}
+
+function within(band: PitchBand, outer: PitchBand): PitchBand {
+  const clamp = (midi: number) => Math.min(outer.highMidi, Math.max(outer.lowMidi, midi));
+  return { lowMidi: clamp(band.lowMidi), highMidi: clamp(band.highMidi) };
+}

@@ -1,0 +1,37 @@
+import type { Take } from "@/shared/contract/take";
+import type { PitchBand } from "@/shared/voice/takeReport";
+import type { HeardTake } from "./recorder/recorder";
+
+/** The same band with the singer's common offset from equal temperament taken off, so that its ends have their names. */
+export function inTune(band: PitchBand, tuningCents: number): PitchBand {
+  const offset = tuningCents / 100;
+  return { lowMidi: band.lowMidi - offset, highMidi: band.highMidi - offset };
+}
+
+/**
+ * A heard take as it is kept: numbers only, as sung. The sound is not part of it.
+ *
+ * @throws RangeError if nothing was heard in it
+ */
+export function takeOfHeard(heard: HeardTake, voiceId: string): Take {
+  const { id, sungAt, warmedUp, effort, report } = heard;
+  const { range, comfort, estimate } = report;
+  if (!range || !comfort || !estimate) throw new RangeError("only a take in which singing was heard can be kept");
+  return {
+    id,
+    voiceId,
+    sungAt,
+    warmedUp,
+    effort,
+    durationS: report.durationS,
+    range,
+    comfort,
+    estimate,
+    tuningCents: report.tuningCents,
+    certainty: report.certainty,
+    reasons: report.reasons.slice(0, 20).map((reason) => reason.slice(0, 300)),
+    notes: report.notes
+      .slice(0, 2000)
+      .map(({ start, end, midi, steadinessCents, sustained, clear }) => ({ start, end, midi, steadinessCents, sustained, clear })),
+  };
+}

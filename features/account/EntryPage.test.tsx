@@ -1,5 +1,5 @@
 import { QueryClientProvider } from "@tanstack/react-query";
-import { act, fireEvent, render, screen, waitFor } from "@testing-library/react";
+import { act, fireEvent, render, screen, waitFor, within } from "@testing-library/react";
 import { aSong, aTake, aVoice } from "@/__tests__/client/belongings";
 import { FakeApi } from "@/__tests__/client/fakeApi";
 import { kept } from "@/__tests__/client/memoryIdb";
@@ -46,7 +46,7 @@ const value = (label: string) => (screen.getByLabelText(label) as HTMLInputEleme
 function fillAndSend(form: "Sign up" | "Sign in", typed = { email, password }) {
   type("E-mail address", typed.email);
   type("Password", typed.password);
-  fireEvent.submit(screen.getByRole("form", { name: form }));
+  fireEvent.click(within(screen.getByRole("form", { name: form })).getByRole("button", { name: form }));
 }
 
 it("signs up, moves in what is on the device, and goes back to where the person came from", async () => {

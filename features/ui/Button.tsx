@@ -1,4 +1,4 @@
-import { Pressable, type StyleProp, type ViewStyle } from "react-native";
+import { Pressable, type StyleProp, type View, type ViewStyle } from "react-native";
 import { ButtonFace, buttonBox, type ButtonLook } from "./ButtonFace";
 import { webProps } from "./webStyle";
 
@@ -14,16 +14,20 @@ export interface ButtonProps extends ButtonLook {
   style?: StyleProp<ViewStyle>;
 }
 
+// The web renderer makes every button a plain one and drops `type`.
+const asSubmit = (node: View | null) => void (node as unknown as HTMLElement | null)?.setAttribute("type", "submit");
+
 export function Button({ onPress, accessibleName, submit, expanded, testID, style, ...look }: ButtonProps) {
   const off = look.disabled === true || look.busy === true;
   return (
     <Pressable
+      {...(submit ? { ref: asSubmit } : null)}
       role="button"
       onPress={onPress}
       disabled={off}
       testID={testID}
       aria-label={accessibleName}
-      {...webProps({ "aria-busy": look.busy || undefined, "aria-expanded": expanded, ...(submit ? { type: "submit" } : null) })}
+      {...webProps({ "aria-busy": look.busy || undefined, "aria-expanded": expanded })}
       style={[buttonBox(look), style]}
     >
       <ButtonFace {...look} />

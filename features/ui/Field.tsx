@@ -34,6 +34,8 @@ export function Field({ label, value, onChangeText, onBlur, error, hint, multili
   const noteId = `${id}-note`;
   const [focused, setFocused] = useState(false);
   const note = error ?? hint;
+  // An address or a password, shown or not, is no prose: no dictionary looks at it.
+  const exact = secure === true || autoComplete === "email" || autoComplete === "new-password" || autoComplete === "current-password";
   return (
     <View style={{ gap: 6 }}>
       <label htmlFor={id} style={{ font: `600 14px/18px ${fonts.text}`, color: colors.ink }}>
@@ -57,9 +59,10 @@ export function Field({ label, value, onChangeText, onBlur, error, hint, multili
         {...webProps({
           "aria-invalid": error === undefined ? undefined : true,
           "aria-describedby": note === undefined ? undefined : noteId,
-          spellCheck: mono ? false : undefined,
-          autoCapitalize: secure || autoComplete === "email" ? "none" : undefined,
+          autoCapitalize: exact ? "none" : undefined,
         })}
+        spellCheck={!exact && mono !== true}
+        autoCorrect={!exact && mono !== true}
         style={[
           {
             minHeight: multiline ? rows * lineHeight + 28 : 52,

@@ -20,7 +20,7 @@ const variables = z
       .optional(),
     PUBLIC_URL: z
       .url({ protocol: /^https?$/, error: "must be an address such as https://larkspan.example" })
-      .refine((value) => URL.canParse(value) && new URL(value).pathname === "/", "must not have a path")
+      .refine((value) => !URL.canParse(value) || new URL(value).pathname === "/", "must not have a path")
       .optional(),
     TRUST_PROXY: z
       .string()

@@ -61,6 +61,7 @@ export function Field({ label, value, onChangeText, onBlur, error, hint, multili
           "aria-describedby": note === undefined ? undefined : noteId,
           autoCapitalize: exact ? "none" : undefined,
         })}
+        blurOnSubmit={false}
         spellCheck={!exact && mono !== true}
         autoCorrect={!exact && mono !== true}
         style={[

@@ -133,8 +133,24 @@ export function spellTonic(pc: number, mode: Mode): string {
  */
 export function spellInKey(pc: number, key: KeyName): string {
   const semitones = (pc - tonicPitchClass(key.tonic) + 12) % 12;
-  const diatonic = modeSteps[key.mode].indexOf(semitones);
-  return spellAbove(key.tonic, diatonic < 0 ? chromaticSteps[semitones]! : diatonic, semitones);
+  return spellAbove(key.tonic, scaleStepOf(semitones, key.mode), semitones);
+}
+
+/**
+ * The scale step that a note belongs to: its own, or for a note off the scale the one it alters by function.
+ *
+ * @param semitones distance above the tonic, 0 to 11
+ * @param mode the key's mode
+ * @returns 0 (tonic) to 6
+ * @throws RangeError if semitones is no whole number from 0 to 11
+ * @see common practice: bII, bIII, #IV, bVI, bVII
+ * @example scaleStepOf(10, "major") // => 6
+ */
+export function scaleStepOf(semitones: number, mode: Mode): number {
+  const diatonic = modeSteps[mode].indexOf(semitones);
+  const step = diatonic < 0 ? chromaticSteps[semitones] : diatonic;
+  if (step === undefined) throw new RangeError("semitones must be a whole number, 0 to 11");
+  return step;
 }
 
 /**

@@ -1,0 +1,94 @@
+import { type KeyName, keyFifths, spellTonic, tonicPitchClass } from "../music/keyName";
+import { glyphs } from "../music/pitch";
+import { type Chart, chartTokens } from "./chart";
+import { chordEvidence } from "./chordEvidence";
+import { melodyEvidence } from "./melodyEvidence";
+import type { MelodyNote } from "./melody";
+
+/** What is known of a song. */
+export interface KeyEvidence {
+  chart?: Chart;
+  notes?: readonly MelodyNote[];
+}
+
+/** A key with its score; only differences between scores mean something. */
+export interface RankedKey {
+  key: KeyName;
+  score: number;
+}
+
+/** The likeliest key. */
+export interface KeyFinding {
+  key: KeyName;
+  runnerUp: KeyName;
+  /** 0 to 1: how much of the belief falls on this key of all 24 */
+  confidence: number;
+  /** score of the key minus score of the runner-up, 0 or more; below 0.05 say "could be" */
+  margin: number;
+  /** plain sentences with glyphs */
+  reasons: string[];
+}
+
+/** Below this the two best keys cannot honestly be told apart. */
+export const closeMargin = 0.05;
+/** Steepness of belief: a lead of this much makes a key e times as likely as the next. */
+const temperature = 0.05;
+const modes = ["major", "minor"] as const;
+
+/**
+ * Ranks all 24 major and minor keys.
+ *
+ * @param evidence a chart, the notes of a tune, or both; a chart counts a little more than a tune
+ * @returns keys best first; empty if there is neither chord nor note
+ */
+export function rankKeys(evidence: KeyEvidence): RankedKey[] {
+  const tokens = evidence.chart ? chartTokens(evidence.chart) : [];
+  const ofChords = chordEvidence(tokens.flatMap((token) => (token.chord ? [token.chord] : [])));
+  const ofTune = melodyEvidence(evidence.notes ?? []);
+  if (!ofChords && !ofTune) return [];
+  const chordShare = !ofTune ? 1 : ofChords ? 0.55 : 0;
+  const written = new Map(
+    tokens.flatMap((token) => (token.chord ? [[tonicPitchClass(token.chord.root), token.chord.root]] : [])),
+  );
+  const ranked: RankedKey[] = [];
+  for (let tonic = 0; tonic < 12; tonic += 1) {
+    for (const mode of modes) {
+      const score =
+        chordShare * (ofChords?.score(tonic, mode) ?? 0) + (1 - chordShare) * (ofTune?.score(tonic, mode) ?? 0);
+      ranked.push({ key: spelled(tonic, mode, written.get(tonic)), score });
+    }
+  }
+  return ranked.sort((a, b) => b.score - a.score);
+}
+
+/**
+ * Finds the key of a song from its chords, its tune, or both: pitch-class profiles, first and last chord or note,
+ * cadences, the chords on the first, fourth and fifth step, and the tune's range.
+ *
+ * @param evidence a chart, the notes of a tune, or both
+ * @returns the likeliest major or minor key with the runner-up, or null if there is neither chord nor note
+ * @see J. Albrecht and D. Shanahan (2013); D. Temperley, Music and Probability (2007); keyProfiles.ts
+ */
+export function findKey(evidence: KeyEvidence): KeyFinding | null {
+  const [best, next, ...others] = rankKeys(evidence);
+  if (!best || !next) return null;
+  const margin = best.score - next.score;
+  const beliefs = [best, next, ...others].map(({ score }) => Math.exp((score - best.score) / temperature));
+  const confidence = 1 / beliefs.reduce((sum, belief) => sum + belief, 0);
+  const tokens = evidence.chart ? chartTokens(evidence.chart) : [];
+  const { tonic, mode } = best.key;
+  const pc = tonicPitchClass(tonic);
+  const reasons = [
+    ...(chordEvidence(tokens.flatMap((token) => (token.chord ? [token.chord] : [])))?.reasons(pc, mode, best.key) ??
+      []),
+    ...(melodyEvidence(evidence.notes ?? [])?.reasons(pc, mode, best.key) ?? []),
+  ];
+  if (margin < closeMargin) reasons.push(`It could be ${next.key.tonic} ${next.key.mode}: the two are close.`);
+  return { key: best.key, runnerUp: next.key, confidence, margin, reasons: [...new Set(reasons)].map(glyphs) };
+}
+
+/** As the chart writes it where that is a key people use, else with the fewest accidentals. */
+function spelled(tonic: number, mode: "major" | "minor", written: string | undefined): KeyName {
+  if (written !== undefined && Math.abs(keyFifths({ tonic: written, mode })) <= 7) return { tonic: written, mode };
+  return { tonic: spellTonic(tonic, mode), mode };
+}

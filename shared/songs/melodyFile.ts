@@ -1,0 +1,81 @@
+import { keyFifths } from "../music/keyName";
+import { readAbc } from "./abcMelody";
+import { rankKeys } from "./findKey";
+import type { Melody } from "./melody";
+import { type MelodyVoice, type WrittenFile, type WrittenVoice, singleLine, vocalLikelihood } from "./melodyVoice";
+import { readMidi } from "./midiMelody";
+import { readMusicXml } from "./musicXmlMelody";
+import { unpackMxl } from "./mxlArchive";
+import { decodeText } from "./textBytes";
+
+/** What a melody file holds: its voices, and which of them is proposed as the sung one. */
+export type MelodyFile =
+  { ok: true; voices: MelodyVoice[]; proposed: number; title: string | null } | { ok: false; reason: string };
+
+const mostBytes = 5_000_000;
+const mostNotes = 10_000;
+const mostVoices = 64;
+
+/**
+ * Reads a melody from a Standard MIDI File, a MusicXML score (plain or compressed) or ABC notation. The kind is told
+ * from the content where it can be, else from the name.
+ *
+ * @param name file name with extension .mid, .midi, .musicxml, .xml, .mxl or .abc
+ * @param bytes the file, at most 5 MB
+ * @returns its voices with times in quarter notes, each a single line of at most 10,000 notes, and the index of the
+ *   likeliest vocal line; or a sentence that says why the file is not read
+ * @see Standard MIDI File 1.0; MusicXML 4.0; ABC music standard 2.1
+ */
+export function readMelodyFile(name: string, bytes: Uint8Array): MelodyFile {
+  if (bytes.length === 0) return { ok: false, reason: "This file is empty." };
+  if (bytes.length > mostBytes)
+    return { ok: false, reason: "This file is larger than 5 MB, more than a melody needs." };
+  const written = readWritten(name, bytes);
+  if (!written.ok) return written;
+  const filled = written.voices.filter((voice) => voice.notes.length > 0);
+  const kept = filled.filter((voice) => voice.notes.length <= mostNotes).slice(0, mostVoices);
+  if (kept.length === 0) {
+    const reason =
+      filled.length === 0 ? "There are no notes in this file." : "No voice of this file has fewer than 10,000 notes.";
+    return { ok: false, reason };
+  }
+  const points = kept.map(vocalLikelihood);
+  const proposed = points.indexOf(Math.max(...points));
+  return { ok: true, voices: kept.map(finished), proposed, title: written.title };
+}
+
+function readWritten(name: string, bytes: Uint8Array): WrittenFile {
+  const extension = /\.([a-z0-9]+)$/i.exec(name)?.[1]?.toLowerCase() ?? "";
+  if (startsWith(bytes, "MThd")) return readMidi(bytes);
+  if (startsWith(bytes, "PK\x03\x04")) {
+    const unpacked = unpackMxl(bytes);
+    return unpacked.ok ? readMusicXml(unpacked.source) : unpacked;
+  }
+  if (extension === "mid" || extension === "midi") return { ok: false, reason: "This is no MIDI file." };
+  if (extension === "mxl") return { ok: false, reason: "This is no compressed MusicXML file." };
+  const text = decodeText(bytes);
+  if (extension === "abc") return readAbc(text);
+  if (["xml", "musicxml"].includes(extension) || /^\s*<\?xml/.test(text)) return readMusicXml(text);
+  if (/^X:\s*\d/m.test(text) && /^K:/m.test(text)) return readAbc(text);
+  return { ok: false, reason: "This kind of file is not known. MIDI, MusicXML and ABC files can be read." };
+}
+
+function finished(voice: WrittenVoice): MelodyVoice {
+  const notes = singleLine(voice.notes);
+  const starts = new Set(notes.map((note) => note.start));
+  const lyrics = voice.lyrics.filter((word) => starts.has(word.start));
+  const melody: Melody = { notes, ...homeOf(voice, notes) };
+  return { name: voice.name, melody, ...(lyrics.length > 0 ? { lyrics } : {}) };
+}
+
+/** What the file says; where it names only a signature, or nothing, the notes themselves are asked. */
+function homeOf(voice: WrittenVoice, notes: Melody["notes"]): Pick<Melody, "home" | "mode"> {
+  const ranked = voice.key ? [] : rankKeys({ notes });
+  const signed = ranked.find(({ key }) => keyFifths(key) === voice.signature);
+  const key = voice.key ?? signed?.key ?? ranked[0]?.key;
+  return { home: key?.tonic ?? null, mode: key?.mode ?? null };
+}
+
+function startsWith(bytes: Uint8Array, tag: string): boolean {
+  return [...tag].every((character, index) => bytes[index] === character.charCodeAt(0));
+}

@@ -1,4 +1,3 @@
-import { Audio } from "expo-av";
 import { useCallback, useEffect, useRef, useState } from "react";
 import { takeSound } from "./takeSound";
 
@@ -9,6 +8,9 @@ export interface Playback {
   play(): Promise<void>;
   stop(): void;
 }
+
+// The player is loaded with the result that may be played, not with the page.
+const loadPlayer = () => import("expo-av");
 
 /** Plays a take from this device's memory; nothing is sent anywhere. */
 export function usePlayback(pcm: Float32Array, sampleRate: number): Playback {
@@ -22,24 +24,36 @@ export function usePlayback(pcm: Float32Array, sampleRate: number): Playback {
     setPlaying(false);
   }, []);
   useEffect(() => stop, [stop, pcm]);
+  useEffect(() => {
+    // Loaded ahead, because some browsers play only right after the press. A failure shows when it is pressed.
+    loadPlayer().catch(() => undefined);
+  }, []);
 
   const play = useCallback(async () => {
     stop();
-    const uri = URL.createObjectURL(takeSound(pcm, sampleRate));
-    const sound = new Audio.Sound();
-    release.current = () => {
-      sound.setOnPlaybackStatusUpdate(null);
-      void sound.unloadAsync().catch(() => undefined);
-      URL.revokeObjectURL(uri);
-    };
     setFailed(false);
     setPlaying(true);
+    const turn = { over: false };
+    release.current = () => {
+      turn.over = true;
+    };
     try {
+      const { Audio } = await loadPlayer();
+      if (turn.over) return;
+      const uri = URL.createObjectURL(takeSound(pcm, sampleRate));
+      const sound = new Audio.Sound();
+      release.current = () => {
+        turn.over = true;
+        sound.setOnPlaybackStatusUpdate(null);
+        void sound.unloadAsync().catch(() => undefined);
+        URL.revokeObjectURL(uri);
+      };
       sound.setOnPlaybackStatusUpdate((status) => {
         if (status.isLoaded && status.didJustFinish) stop();
       });
       await sound.loadAsync({ uri }, { shouldPlay: true });
     } catch {
+      if (turn.over) return;
       stop();
       setFailed(true);
     }

@@ -3,7 +3,7 @@ import { Screen } from "@/features/ui/Screen";
 
 export default function AccountRoute() {
   return (
-    <Screen title="Account">
+    <Screen title="Account" wide>
       <AccountPage />
     </Screen>
   );

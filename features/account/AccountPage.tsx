@@ -7,6 +7,7 @@ import { Heading } from "@/features/ui/Heading";
 import { LinkButton } from "@/features/ui/LinkButton";
 import { Skeleton } from "@/features/ui/Skeleton";
 import { Text } from "@/features/ui/Text";
+import { useLayout } from "@/features/ui/useLayout";
 import { MoveInNotice } from "./MoveInNotice";
 import { SignedInCard } from "./SignedInCard";
 import { ThemeChoice } from "./ThemeChoice";
@@ -30,20 +31,26 @@ function Person() {
 /** Account and settings. */
 export function AccountPage() {
   const { status } = useSession();
+  const wide = useLayout() === "wide";
+  const column = wide ? ({ flexBasis: 0, flexGrow: 1, gap: 16 } as const) : ({ gap: 16 } as const);
   return (
-    <View style={{ maxWidth: 560, width: "100%", gap: 16 }}>
-      {status === "signed-in" && <MoveInNotice />}
-      <Person />
-      <Card style={{ gap: 12 }}>
-        <Heading level={2}>Instruments</Heading>
-        <Text variant="small" tone="soft">
-          Tunings, strings and frets of what you play; the ways to play a key follow from them.
-        </Text>
-        <View style={{ alignSelf: "flex-start" }}>
-          <LinkButton kind="secondary" small label="Your instruments" href="/instruments" testID="to-instruments" />
-        </View>
-      </Card>
-      <ThemeChoice />
+    <View style={{ maxWidth: wide ? 1080 : 560, width: "100%", gap: wide ? 32 : 16, flexDirection: wide ? "row" : "column" }}>
+      <View style={column}>
+        {status === "signed-in" && <MoveInNotice />}
+        <Person />
+      </View>
+      <View style={column}>
+        <Card style={{ gap: 12 }}>
+          <Heading level={2}>Instruments</Heading>
+          <Text variant="small" tone="soft">
+            Tunings, strings and frets of what you play. The ways to play a key follow from them.
+          </Text>
+          <View style={{ alignSelf: "flex-start" }}>
+            <LinkButton kind="secondary" small label="Your instruments" href="/instruments" testID="to-instruments" />
+          </View>
+        </Card>
+        <ThemeChoice />
+      </View>
     </View>
   );
 }

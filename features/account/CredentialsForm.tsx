@@ -95,7 +95,7 @@ export function CredentialsForm(props: CredentialsFormProps) {
             />
           )}
         />
-        <View style={{ alignSelf: "flex-start" }}>
+        <View style={{ alignSelf: "flex-start", marginLeft: -8 }}>
           <Button kind="text" small label={shown ? "Hide password" : "Show password"} onPress={() => setShown(!shown)} testID="show-password" />
         </View>
       </View>

@@ -1,9 +1,11 @@
 import { Redirect, type Href } from "expo-router";
 import { View } from "react-native";
 import { useSession } from "@/features/api/SessionProvider";
+import { Card } from "@/features/ui/Card";
 import { LinkButton } from "@/features/ui/LinkButton";
 import { Notice } from "@/features/ui/Notice";
 import { Text } from "@/features/ui/Text";
+import { useLayout } from "@/features/ui/useLayout";
 import { nextPath } from "./nextPath";
 import { SignInForm } from "./SignInForm";
 import { SignUpForm } from "./SignUpForm";
@@ -19,6 +21,7 @@ interface EntryPageProps {
 export function EntryPage({ kind, next }: EntryPageProps) {
   const session = useSession();
   const entry = useEntry(kind);
+  const phone = useLayout() === "phone";
   const target = nextPath(next);
   const query = target === "/" ? "" : `?next=${encodeURIComponent(target)}`;
   if (session.status === "signed-in" && !entry.entering) {
@@ -26,6 +29,7 @@ export function EntryPage({ kind, next }: EntryPageProps) {
     return <Redirect href={(settled ? target : "/account") as Href} />;
   }
   const up = kind === "sign-up";
+  const form = up ? <SignUpForm entry={entry} /> : <SignInForm entry={entry} />;
   return (
     <View style={{ maxWidth: 480, width: "100%", gap: 20 }}>
       {session.ended && <Notice kind="caution">Your session has ended. Sign in again to see your shelf; nothing is lost.</Notice>}
@@ -34,7 +38,7 @@ export function EntryPage({ kind, next }: EntryPageProps) {
           ? "With an account your voices, songs and keys are kept, and you find them on every device you sign in on."
           : "Sign in to find your voices, songs and keys."}
       </Text>
-      {up ? <SignUpForm entry={entry} /> : <SignInForm entry={entry} />}
+      {phone ? form : <Card style={{ padding: 24 }}>{form}</Card>}
       <View style={{ flexDirection: "row", flexWrap: "wrap", alignItems: "center", columnGap: 4 }}>
         <Text variant="body">{up ? "You have an account already?" : "You have no account yet?"}</Text>
         <LinkButton

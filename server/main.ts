@@ -4,6 +4,7 @@ import type { AddressInfo } from "node:net";
 import { preparePasswords } from "./auth/passwords";
 import { createApp } from "./createApp";
 import { createDataSource } from "./database/dataSource";
+import { demoSignIns, loadDemoScenario } from "./database/demoScenario";
 import { migrate } from "./database/migrate";
 import { EnvError, readEnv } from "./env";
 import { createLogger } from "./http/requestLog";
@@ -22,6 +23,8 @@ async function main(): Promise<void> {
   });
   const dataSource = await createDataSource(env.databaseUrl, (error) => logger.warn(error)).initialize();
   await preparePasswords();
+  if (env.demo) await loadDemoScenario(dataSource);
+  const signIns = env.demo ? await demoSignIns(dataSource) : [];
 
   const { app } = createApp(dataSource, logger, env);
   const server = createServer(app);
@@ -39,10 +42,6 @@ async function main(): Promise<void> {
     server.listen(env.port, env.host, resolve);
   });
 
-  const { port } = server.address() as AddressInfo;
-  const host = env.host.includes(":") ? `[${env.host}]` : env.host;
-  say(`Larkspan is ready at ${env.publicOrigin ?? `http://${host}:${port}`}`);
-
   let stopping = false;
   // Ctrl-C reaches this process from the terminal and again from the start script.
   const stop = () => {
@@ -53,6 +52,13 @@ async function main(): Promise<void> {
   };
   process.on("SIGINT", stop);
   process.on("SIGTERM", stop);
+
+  const { port } = server.address() as AddressInfo;
+  const host = env.host.includes(":") ? `[${env.host}]` : env.host;
+  say(`Larkspan is ready at ${env.publicOrigin ?? `http://${host}:${port}`}`);
+  for (const { name, role, email, password } of signIns) {
+    say(`  ${name} (${role}): ${email}, password "${password}"`);
+  }
 }
 
 function say(line: string): void {

@@ -48,17 +48,22 @@ it("opens one account when the form is sent twice at once", async () => {
 
 it("says the same of a wrong password and of an unknown address, and takes as long", async () => {
   const { email } = await Person.signUp(server.app);
-  const time = async (body: object) => {
-    const from = performance.now();
-    const response = await post("sign-in", body).expect(401);
-    return { body: response.body as object, ms: performance.now() - from };
+  // The quickest of several, as other programs on the machine only ever make an answer slower.
+  const quickest = async (body: object) => {
+    const times: number[] = [];
+    let said: object = {};
+    for (let k = 0; k < 4; k++) {
+      const from = performance.now();
+      said = (await post("sign-in", body).expect(401)).body as object;
+      times.push(performance.now() - from);
+    }
+    return { said, ms: Math.min(...times) };
   };
-  const wrong = await time({ email, password: "not the password" });
-  expect(wrong.body).toMatchObject({ code: "wrong-credentials" });
-  const unknown = await time({ email: "nobody@orlow-quay.example", password });
-  expect(unknown.body).toEqual(wrong.body);
-  // Without the placeholder hash the unknown address is answered about ten times sooner.
-  expect(unknown.ms).toBeGreaterThan(wrong.ms / 4);
+  const wrong = await quickest({ email, password: "not the password" });
+  expect(wrong.said).toMatchObject({ code: "wrong-credentials" });
+  const unknown = await quickest({ email: "nobody@orlow-quay.example", password });
+  expect(unknown.said).toEqual(wrong.said);
+  expect(unknown.ms).toBeGreaterThan(wrong.ms / 2);
 });
 
 it("takes a password typed in another Unicode form for the same", async () => {

@@ -65,6 +65,18 @@ it.each(["SIGTERM", "SIGINT"] as const)(
   },
 );
 
+it("prints how to get into the demonstration, and only where there is one", async () => {
+  const shown = start({ DATABASE_URL: database.url, PORT: "0" });
+  const hidden = start({ DATABASE_URL: database.url, PORT: "0", NODE_ENV: "production", TOKEN_SECRET: "x".repeat(32) });
+  for (const server of [shown, hidden]) {
+    await ready(server);
+    server.child.kill("SIGTERM");
+    await server.ended;
+  }
+  expect(shown.said.out).toMatch(/Maren Oake \(singer\): maren@orlow-quay\.example, password "[^"]{12,}"\n/);
+  expect(hidden.said.out).not.toContain("maren");
+});
+
 it("says that its port is in use", async () => {
   const first = start({ DATABASE_URL: database.url, PORT: "0" });
   const { port } = new URL(await ready(first));

@@ -1,0 +1,87 @@
+import request from "supertest";
+import type { DataSource } from "typeorm";
+import type { z } from "zod";
+import { decision } from "../../shared/contract/decision";
+import { ownInstrument } from "../../shared/contract/instrument";
+import { song } from "../../shared/contract/song";
+import { take } from "../../shared/contract/take";
+import { voice } from "../../shared/contract/voice";
+import { createDataSource } from "../../server/database/dataSource";
+import { demoSignIns, loadDemoScenario } from "../../server/database/demoScenario";
+import { startTestServer, type TestServer } from "./testServer";
+
+let server: TestServer;
+let dataSource: DataSource;
+beforeAll(async () => {
+  server = await startTestServer();
+  dataSource = await createDataSource(server.database.url, () => undefined).initialize();
+});
+afterAll(async () => {
+  await dataSource.destroy();
+  await server.close();
+});
+beforeEach(() => server.database.query("DELETE FROM users"));
+
+const counts = async () => {
+  const rows = await server.database.query(
+    `SELECT (SELECT count(*)::int FROM users) AS users, (SELECT count(*)::int FROM songs) AS songs, (SELECT count(*)::int FROM takes) AS takes`,
+  );
+  return rows[0];
+};
+
+async function signIn(email: string, password: string) {
+  const session = await request(server.app).post("/api/auth/sign-in").send({ email, password }).expect(200);
+  return async <Item>(name: string, schema: z.ZodType<Item>): Promise<Item[]> => {
+    const items = await request(server.app)
+      .get(`/api/${name}`)
+      .set("Authorization", `Bearer ${session.body.accessToken}`)
+      .expect(200);
+    return (items.body as unknown[]).map((item) => schema.parse(item));
+  };
+}
+
+it("gives everybody of the class a voice, takes, the two songs, their keys and an instrument, all as the contracts say", async () => {
+  await loadDemoScenario(dataSource);
+  const people = await demoSignIns(dataSource);
+  expect(people.map(({ role }) => role)).toEqual(["singer", "singer", "teacher"]);
+  for (const { email, password } of people) {
+    const list = await signIn(email, password);
+    const [voices, takes, songs, decisions, instruments] = await Promise.all([
+      list("voices", voice),
+      list("takes", take),
+      list("songs", song),
+      list("decisions", decision),
+      list("instruments", ownInstrument),
+    ]);
+    expect(voices).toHaveLength(1);
+    expect(takes.length).toBeGreaterThan(0);
+    expect(songs.map((one) => one.demo).sort()).toEqual(["ferry", "lantern"]);
+    expect(songs.every(({ tune }) => tune?.kind === "melody")).toBe(true);
+    expect(decisions).toHaveLength(2);
+    expect(instruments).toHaveLength(1);
+    for (const { range, comfort } of takes) {
+      expect(comfort.lowMidi).toBeGreaterThanOrEqual(range.lowMidi);
+      expect(comfort.highMidi).toBeLessThanOrEqual(range.highMidi);
+    }
+    for (const { instrument, score, way } of decisions) {
+      expect(instrument).toBe(instruments[0]?.id);
+      expect(score).toBeGreaterThan(50);
+      expect(way).not.toBeNull();
+    }
+  }
+});
+
+it("is loaded once, also when three servers start on the same empty database", async () => {
+  await Promise.all([1, 2, 3].map(() => loadDemoScenario(dataSource)));
+  await loadDemoScenario(dataSource);
+  expect(await counts()).toEqual({ users: 3, songs: 6, takes: 4 });
+});
+
+it("stays out of a database that somebody uses", async () => {
+  await server.database.query(
+    "INSERT INTO users (email, password_hash) VALUES ('somebody@orlow-quay.example', 'none')",
+  );
+  await loadDemoScenario(dataSource);
+  expect(await counts()).toEqual({ users: 1, songs: 0, takes: 0 });
+  expect(await demoSignIns(dataSource)).toEqual([]);
+});

@@ -1,5 +1,5 @@
 import { createRandom, type Random } from "./random";
-import { addRoom, type RoomOptions } from "./room";
+import { addRoom, rms, type RoomOptions } from "./room";
 import { createVocalTract, type Vowel } from "./vocalTract";
 
 export interface PhraseNote {
@@ -162,9 +162,24 @@ function soundVoice(sounding: Sounding[], pitch: (t: number) => number, options:
     const hiss = note.consonantFrom !== null && t >= note.consonantFrom && t < note.start - 0.005 ? 0.02 * random.normal() : 0;
     out[i] = filter.next(soft * gain) + hiss;
   }
+  evenOut(out, sounding, rate);
   let peak = 1e-9;
   for (const x of out) peak = Math.max(peak, Math.abs(x));
   return out.map((x) => (0.4 * x) / peak);
+}
+
+/** Singers keep their notes about equally loud, whatever a formant does to one pitch: most of the difference is taken out. */
+function evenOut(pcm: Float32Array, sounding: Sounding[], rate: number): void {
+  const spans = sounding.map((n) => [Math.round(n.start * rate), Math.min(pcm.length, Math.round(n.end * rate))] as const);
+  const levels = spans.map(([from, to], k) => rms(pcm.subarray(from, to)) / 10 ** ((sounding[k]!.levelDb ?? 0) / 20));
+  const mean = levels.reduce((sum, x) => sum + x, 0) / levels.length;
+  const gains = levels.map((x) => (mean / Math.max(1e-12, x)) ** 0.75);
+  const blend = 0.04 * rate;
+  spans.forEach(([from], k) => {
+    const to = spans[k + 1]?.[0] ?? pcm.length;
+    const before = k === 0 ? gains[0]! : gains[k - 1]!;
+    for (let i = from; i < to; i++) pcm[i]! *= before + (gains[k]! - before) * ease((i - from) / blend);
+  });
 }
 
 /** Derivative of the glottal flow: open for 60 % of the cycle, with the closing step smoothed against aliasing. */

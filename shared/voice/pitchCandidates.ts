@@ -1,5 +1,6 @@
 import { ANALYSIS_RATE } from "../signal/resampler";
 import { MAX_LAG, SHORT_WINDOW, WINDOW, type LagFrame } from "../signal/lagFrame";
+import { harmonicPresence } from "./harmonicPresence";
 import { DIGITAL_SILENCE_DB, type RoomFloor } from "./roomFloor";
 
 /** Search limits of the tracker in Hz. */
@@ -19,8 +20,8 @@ export interface PitchCandidate {
   midi: number;
   /** normalised square difference at the period after the room was subtracted, at most 1 */
   clarity: number;
-  /** share of the sound's power in the candidate's odd harmonics, 0 to 1; near 0 tells an octave-down error */
-  oddShare: number;
+  /** how completely its harmonics are there, 0 to 1; near 0 tells an octave-down error */
+  presence: number;
 }
 
 /** A frame with all its possible pitches and how far it stands out of the room. */
@@ -49,8 +50,15 @@ export function findCandidates(frame: LagFrame, room: RoomFloor, short: () => La
   const long = peaks(cleanedDifference(frame, room, WINDOW));
   const clearest = long.reduce((top, c) => Math.max(top, c.clarity), 0);
   const loudEnough = aboveRoomDb > 3 && frame.levelDb > DIGITAL_SILENCE_DB;
-  out.candidates = clearest < CLEAR_ENOUGH && loudEnough ? joined(long, peaks(cleanedDifference(short(), room, SHORT_WINDOW))) : long;
+  const candidates = clearest < CLEAR_ENOUGH && loudEnough ? joined(long, peaks(cleanedDifference(short(), room, SHORT_WINDOW))) : long;
+  const r = frame.r.map((x, lag) => x - room.r[lag]!);
+  out.candidates = candidates.map((c) => (hasShorter(c, candidates) ? { ...c, presence: harmonicPresence(r, c.hz) } : c));
   return out;
+}
+
+/** Whether the sound may be a higher pitch of which this candidate is only a multiple of the period. */
+function hasShorter(candidate: PitchCandidate, all: readonly PitchCandidate[]): boolean {
+  return all.some((c) => c.midi > candidate.midi + 6.5 && c.clarity > 0.4);
 }
 
 /** Keeps the clearer of two candidates that stand for the same pitch. */
@@ -70,8 +78,7 @@ function peaks(n: Float32Array): PitchCandidate[] {
     const [period, clarity] = refine(n, lag);
     const hz = ANALYSIS_RATE / period;
     if (clarity < LEAST_CLARITY || hz < LOWEST_HZ || hz > HIGHEST_HZ) continue;
-    const half = valueAt(n, period / 2);
-    found.push({ hz, midi: 69 + 12 * Math.log2(hz / 440), clarity: Math.min(1, clarity), oddShare: Math.max(0, (clarity - half) / 2) });
+    found.push({ hz, midi: 69 + 12 * Math.log2(hz / 440), clarity: Math.min(1, clarity), presence: 1 });
   }
   if (found.length <= MOST_CANDIDATES) return found;
   return [...found].sort((a, b) => rank(b) - rank(a)).slice(0, MOST_CANDIDATES).sort((a, b) => b.hz - a.hz);

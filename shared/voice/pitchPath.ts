@@ -11,8 +11,9 @@ const COST = {
   perSemitone: 0.12,
   mostForAJump: 0.9,
   voicing: 0.35,
-  unvoiced: 0.62,
-  octaveDown: 0.5,
+  unvoiced: 0.66,
+  absent: 0.35,
+  presentFrom: 0.35,
   perOctaveDown: 0.06,
   soft: 0.8,
 };
@@ -98,7 +99,7 @@ function local(candidate: PitchCandidate | null, frame: CandidateFrame): number 
   return (
     haze(candidate.clarity) +
     COST.perOctaveDown * ((100 - candidate.midi) / 12) * 0.5 +
-    (candidate.oddShare < 0.02 ? COST.octaveDown * (1 - candidate.oddShare / 0.02) : 0) * 0.2 +
+    COST.absent * Math.max(0, 1 - candidate.presence / COST.presentFrom) +
     COST.soft * softness
   );
 }

@@ -12,7 +12,7 @@ export interface RoomFloor {
 export const DIGITAL_SILENCE_DB = -90;
 const LEAST_STEP_DB = 6;
 /** With this share of muted frames the pauses are cut out by a gate, and what is quiet beside them is singing. */
-const MUTED_SHARE = 0.08;
+const MUTED_SHARE = 0.03;
 /** Lags, at 8 kHz, over which quiet frames are compared with each other: 60 to 300 Hz. */
 const COMPARED = { from: 27, to: 133 };
 

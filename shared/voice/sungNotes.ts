@@ -8,8 +8,8 @@ export const HELD_WITHIN_CENTS = 60;
 export const HELD_IN_PHRASE_S = 0.24;
 /** Least held time in a guided hold, in seconds. */
 export const HELD_IN_HOLD_S = 0.5;
-/** The analysis window hides about 20 ms of a note at each end; measured stretches are this much shorter than sung ones. */
-const HIDDEN_S = 0.04;
+/** The analysis window hides about 25 ms of a note at each end; measured stretches are this much shorter than sung ones. */
+const HIDDEN_S = 0.05;
 const SHORTEST_NOTE_FRAMES = 6;
 const BRIDGED_GAP_FRAMES = 3;
 

@@ -1,0 +1,62 @@
+import { ANALYSIS_RATE } from "../signal/resampler";
+import { MAX_LAG } from "../signal/lagFrame";
+
+const MOST_HARMONICS = 12;
+const HIGHEST_HARMONIC_HZ = 2300;
+/** Harmonics whose surroundings hold less than this share of the power tell nothing. */
+const LEAST_SHARE = 3e-4;
+
+const lagWindow = Float32Array.from({ length: MAX_LAG + 1 }, (_, lag) => (lag === 0 ? 0.5 : 0.5 + 0.5 * Math.cos((Math.PI * lag) / MAX_LAG)));
+
+/**
+ * How completely the harmonics of a pitch are there. A pitch one octave (or a twelfth) too low explains the sound's
+ * repetition just as well, but every second harmonic (or two of three) is missing; two notes at once have a common
+ * low period whose harmonics are mostly missing. A lost fundamental alone counts little.
+ *
+ * @param r autocorrelation of the frame with the room subtracted, shape [141]
+ * @param hz the pitch in question
+ * @returns 0 (those between are missing) to 1 (all are there); 1 where too few harmonics fit to tell
+ * @see the Wiener-Khinchin theorem: the spectrum is the cosine transform of the autocorrelation
+ */
+export function harmonicPresence(r: Float32Array, hz: number): number {
+  const count = Math.min(MOST_HARMONICS, Math.floor(HIGHEST_HARMONIC_HZ / hz));
+  if (count < 3 || !(r[0]! > 0)) return 1;
+  const power = new Float32Array(count + 2);
+  for (let h = 1; h <= count; h++) power[h] = Math.max(0, powerAt(r, h * hz));
+  const least = LEAST_SHARE * MAX_LAG * 0.5 * Math.max(0, r[0]!);
+  let presence = 1;
+  for (const every of [2, 3, 5, 7]) if (every < count) presence = Math.min(presence, between(power, count, every, least));
+  return presence;
+}
+
+/** Mean presence of the harmonics between the multiples of `every`, against the slope from multiple to multiple. */
+function between(power: Float32Array, count: number, every: number, least: number): number {
+  let sum = 0;
+  let weight = 0;
+  for (let h = 1; h <= count; h++) {
+    if (h % every === 0) continue;
+    const below = power[h - (h % every)]!;
+    const above = h - (h % every) + every <= count ? power[h - (h % every) + every]! : below;
+    const share = (h % every) / every;
+    const expected = h < every ? above : Math.max(below, 1e-3 * above) ** (1 - share) * Math.max(above, 1e-3 * below) ** share;
+    if (expected < least && power[h]! < least) continue;
+    const trust = h < every ? 0.5 : 1;
+    sum += trust * Math.min(1, Math.sqrt(power[h]! / Math.max(expected, 1e-30)));
+    weight += trust;
+  }
+  return weight >= 1 ? sum / weight : 1;
+}
+
+function powerAt(r: Float32Array, hz: number): number {
+  const step = 2 * Math.cos((2 * Math.PI * hz) / ANALYSIS_RATE);
+  let before = step / 2;
+  let now = 1;
+  let sum = 0;
+  for (let lag = 0; lag <= MAX_LAG; lag++) {
+    sum += lagWindow[lag]! * r[lag]! * now;
+    const next = step * now - before;
+    before = now;
+    now = next;
+  }
+  return sum;
+}

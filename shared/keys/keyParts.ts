@@ -56,7 +56,7 @@ export function voiceEdges(voice: SingingVoice): VoiceEdges {
 export function keyParts(pitches: readonly TunePitch[], edges: VoiceEdges): KeyParts {
   const low = pitches[0]!.midi;
   const high = pitches[pitches.length - 1]!.midi;
-  const beyond = low < edges.rangeLow || high > edges.rangeHigh;
+  const outside = total(pitches, ({ midi, share }) => (midi < edges.rangeLow || midi > edges.rangeHigh ? share : 0));
   const losses: KeyParts = {
     comfort: capped(total(pitches, ({ midi, share }) => share * discomfort(midi, edges))),
     roomAbove: capped((roomAboveEnough - (edges.rangeHigh - high)) / roomAboveEnough),
@@ -65,11 +65,12 @@ export function keyParts(pitches: readonly TunePitch[], edges: VoiceEdges): KeyP
     // At most two thirds, so that in points it stays below what the same distance above costs.
     lowCarry: (2 / 3) * capped(4.5 * total(pitches, ({ midi, share }) => share * ramp(edges.comfortLow + 3 - midi))),
   };
-  // Losing all that is sure takes a note beyond; roomAbove or roomBelow is then lost in full.
+  // Beyond the range every part shrinks by the time spent out there at least, and the room on that side is lost in full.
   const points = (part: keyof KeyParts) => {
     const base = sure[part];
     const earned = partMaxima[part] - base;
-    return beyond ? base - whole(base * losses[part]) : base + earned - whole(earned * losses[part]);
+    if (outside > 0) return base - whole(base * Math.max(losses[part], Math.min(1, outside)));
+    return base + earned - whole(earned * losses[part]);
   };
   return {
     comfort: points("comfort"),

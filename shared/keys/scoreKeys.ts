@@ -90,7 +90,8 @@ function bestOctave(
     const score = parts.comfort + parts.roomAbove + parts.roomBelow + parts.longHigh + parts.lowCarry;
     return { octave, shift, moved, parts, score, reserves: reserves(moved, edges) };
   });
-  const best = choices.reduce((a, b) => (compareOctaves(a, b) <= 0 ? a : b));
+  // Below MIDI 0 notes have no names.
+  const best = choices.filter(({ moved }) => moved[0]!.midi >= 0).reduce((a, b) => (compareOctaves(a, b) <= 0 ? a : b));
   const { octave, shift, moved, parts, score } = best;
   const tonic = spellTonic(tonicPc, mode);
   const marks = moved.map(({ midi, share }): KeyMark => {

@@ -43,8 +43,8 @@ export function tunePitches(tune: Tune): TunePitch[] {
   if (tune.notes.length === 0) throw new RangeError("a tune needs at least one note");
   const lengths = new Map<number, number[]>();
   for (const note of tune.notes) {
-    if (!(note.duration > 0) || !Number.isFinite(note.duration) || !Number.isFinite(note.midi))
-      throw new RangeError("every note needs a pitch and a length above 0");
+    if (!(note.duration > 0) || !Number.isFinite(note.duration) || !(note.midi >= 0 && note.midi <= 127))
+      throw new RangeError("every note needs a MIDI pitch, 0 to 127, and a length above 0");
     const midi = Math.round(note.midi);
     lengths.set(midi, [...(lengths.get(midi) ?? []), note.duration]);
   }
@@ -62,8 +62,8 @@ export function tunePitches(tune: Tune): TunePitch[] {
 }
 
 function spanPitches(lowMidi: number, highMidi: number): TunePitch[] {
-  if (!Number.isFinite(lowMidi) || !Number.isFinite(highMidi) || lowMidi > highMidi)
-    throw new RangeError("the span runs from low to high");
+  if (!(lowMidi >= 0 && lowMidi <= highMidi && highMidi <= 127))
+    throw new RangeError("a span runs from low to high, MIDI 0 to 127");
   const low = Math.round(lowMidi);
   const high = Math.round(highMidi);
   const weights = Array.from({ length: high - low + 1 }, (_, k) => 1 + Math.min(k, high - low - k));

@@ -115,8 +115,8 @@ function search(neck: Neck, needs: ChordNeeds, visit: (frets: (number | null)[])
   const count = neck.open.length;
   const frets: (number | null)[] = Array.from({ length: count }, () => null);
   const short = neck.instrument.strings.map(({ startsAtFret }) => startsAtFret !== undefined);
-  // One finger at least is at the window's first fret; without a second barre three are left.
-  const mostAbove = neck.all ? 5 : 3;
+  // One finger at least is at the window's first fret; the other three may lie across strings.
+  const mostAbove = 5;
   const allowed = (string: number, fret: number) => {
     const raised = neck.semitones[fret];
     return raised != null && ((needs.allowed >> ((neck.open[string]! + raised) % 12)) & 1) === 1;
@@ -185,7 +185,7 @@ function judge(frets: readonly (number | null)[], neck: Neck, needs: ChordNeeds)
     }
   }
   if (needs.bass !== null && lowestPitch % 12 !== needs.bass) return null;
-  const hand = fingering(frets, neck.all);
+  const hand = fingering(frets, neck.all ? 2 : 1);
   if (!hand) return null;
   const reachMm = highestFret === 0 ? 0 : neck.positions[highestFret]! - neck.positions[lowestFret]!;
   const silent = silentStrings(frets, neck.instrument);
@@ -193,6 +193,7 @@ function judge(frets: readonly (number | null)[], neck: Neck, needs: ChordNeeds)
     fingers: hand.count,
     barreStrings: hand.barre ? hand.barre.toString - hand.barre.fromString + 1 : 0,
     barreFret: hand.barre ? hand.barre.fret : 0,
+    laterBarre: hand.barre !== null && hand.fingers[hand.barre.fromString] !== 1,
     lowestFret: highestFret === 0 ? 0 : lowestFret,
     hasOpen,
     innerSilent: silent.inner,

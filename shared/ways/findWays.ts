@@ -39,6 +39,8 @@ const dislike = { capoFret: 0.3, retuneSemitone: 0.8, barres: 2 };
 
 /** Costs of the hand that differ by no more than this are alike: a capo narrows every reach a little. */
 const alike = 0.15;
+/** A way that costs this much more than the best is not worth showing. */
+const tooMuchMore = 1.5;
 
 interface Candidate {
   kind: Way["kind"];
@@ -52,6 +54,8 @@ interface Candidate {
   path: HandPath;
   strings: StringChange[];
   difficulty: number;
+  /** cost of the hand, dislike of barres included */
+  hand: number;
   total: number;
 }
 
@@ -92,7 +96,7 @@ export function findWays(question: WaysQuestion): Way[] {
     }
   }
   const standing = candidates.filter((way) => !candidates.some((other) => dominates(other, way)));
-  return inOrder(standing).map((way) => toWay(way, to, instrument));
+  return inOrder(worthwhile(standing)).map((way) => toWay(way, to, instrument));
 }
 
 interface Setup {
@@ -131,10 +135,8 @@ function candidate(
     (retune === 0 ? 0 : work.retune + work.retuneSemitone * Math.abs(retune)) +
     (strings.some(({ verdict }) => verdict === "slack") ? work.slack : 0) +
     (strings.some(({ verdict }) => verdict === "tight") ? work.tight : 0);
-  const wished =
-    wishes.capo * dislike.capoFret * capo +
-    wishes.retune * dislike.retuneSemitone * Math.abs(retune) +
-    (wishes.barre * dislike.barres * path.barres) / Math.max(1, chords.length);
+  const hand = path.cost + (wishes.barre * dislike.barres * path.barres) / Math.max(1, chords.length);
+  const wished = wishes.capo * dislike.capoFret * capo + wishes.retune * dislike.retuneSemitone * Math.abs(retune);
   return {
     kind,
     retune,
@@ -147,7 +149,8 @@ function candidate(
     path,
     strings,
     difficulty: 1 - easeOf(path.cost),
-    total: path.cost + done + wished,
+    hand,
+    total: hand + done + wished,
   };
 }
 
@@ -159,6 +162,8 @@ function stringChanges(instrument: Instrument, retune: number): StringChange[] {
 
 /** At least as good in everything that can be weighed, and better in something. */
 function dominates(a: Candidate, b: Candidate): boolean {
+  // A capo one fret higher spares the strings, so tuning up is nothing to go with a capo.
+  if (b.retune > 0 && b.capo > 0 && a.retune === 0 && a.capo === b.capo + b.retune) return true;
   const worth = (way: Candidate) => [
     way.capo,
     Math.abs(way.retune),
@@ -168,9 +173,15 @@ function dominates(a: Candidate, b: Candidate): boolean {
   ];
   const first = worth(a);
   const second = worth(b);
-  const easier = b.path.cost - a.path.cost;
+  const easier = b.hand - a.hand;
   if (easier < -alike || first.some((cost, k) => cost > second[k]!)) return false;
   return easier > alike || first.some((cost, k) => cost < second[k]!);
+}
+
+/** Without ways that cost far more than the best one, but for those that keep the chart or the instrument as it is. */
+function worthwhile(ways: readonly Candidate[]): Candidate[] {
+  const best = Math.min(...ways.map(({ total }) => total));
+  return ways.filter(({ kind, asWritten, total }) => kind === "as-is" || asWritten || total <= best + tooMuchMore);
 }
 
 function inOrder(ways: readonly Candidate[]): Candidate[] {

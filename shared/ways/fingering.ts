@@ -18,12 +18,12 @@ interface Unit {
  * may lie across several strings (a barre) where every string between is stopped there or higher.
  *
  * @param frets per string: null = silent, 0 = open, else the fret
- * @param secondBarre whether another finger may also lie across strings when four single ones do not suffice
+ * @param mostBarres how many fingers may lie across strings, where four single ones do not suffice
  * @returns the fingering, or null if four fingers cannot do it
- * @example fingering([2, 2, 2], false).fingers // => [1, 1, 1]
- * @example fingering([null, 3, 2, 0, 1, 0], false).fingers // => [0, 3, 2, 0, 1, 0]
+ * @example fingering([2, 2, 2], 1).fingers // => [1, 1, 1]
+ * @example fingering([null, 3, 2, 0, 1, 0], 1).fingers // => [0, 3, 2, 0, 1, 0]
  */
-export function fingering(frets: readonly (number | null)[], secondBarre: boolean): Fingering | null {
+export function fingering(frets: readonly (number | null)[], mostBarres: number): Fingering | null {
   const stopped: number[] = [];
   let lowest = Infinity;
   let open = false;
@@ -45,7 +45,7 @@ export function fingering(frets: readonly (number | null)[], secondBarre: boolea
     ...(barred ? [{ fret: lowest, strings: index }] : index.map((string) => ({ fret: lowest, strings: [string] }))),
     ...rest.map((string) => ({ fret: frets[string]!, strings: [string] })),
   ].sort((a, b) => a.fret - b.fret || a.strings[0]! - b.strings[0]!);
-  const joined = units.length > 4 && secondBarre ? joinHighest(units, frets) : units;
+  const joined = joinRuns(units, frets, barred ? mostBarres - 1 : mostBarres);
   if (joined.length > 4) return null;
   return assign(joined, frets.length);
 }
@@ -67,17 +67,28 @@ function assign(units: readonly Unit[], strings: number): Fingering {
   return { fingers, barre, count: units.length };
 }
 
-/** Lays one finger across the strings of the highest fret that has several, if the strings between allow it. */
-function joinHighest(units: readonly Unit[], frets: readonly (number | null)[]): Unit[] {
-  const candidates = [...new Set(units.map((unit) => unit.fret))].sort((a, b) => b - a);
-  for (const fret of candidates) {
-    const strings = units.filter((unit) => unit.fret === fret).flatMap((unit) => unit.strings);
-    if (strings.length < 2 || !coveredAbove(frets, strings, fret)) continue;
-    return [...units.filter((unit) => unit.fret !== fret), { fret, strings: strings.sort((a, b) => a - b) }].sort(
-      (a, b) => a.fret - b.fret,
-    );
+/** Lays fingers across neighbouring strings of one fret, the widest first, until four suffice or no more may lie. */
+function joinRuns(units: readonly Unit[], frets: readonly (number | null)[], barres: number): Unit[] {
+  let joined = [...units];
+  for (let left = barres; left > 0 && joined.length > 4; left--) {
+    const widest = runs(joined, frets).sort((a, b) => b.strings.length - a.strings.length || b.fret - a.fret)[0];
+    if (!widest) break;
+    joined = [...joined.filter(({ strings }) => !widest.strings.includes(strings[0]!)), widest];
   }
-  return [...units];
+  return joined.sort((a, b) => a.fret - b.fret || a.strings[0]! - b.strings[0]!);
+}
+
+/** Sets of two and more single-string units at one fret that one finger could stop. */
+function runs(units: readonly Unit[], frets: readonly (number | null)[]): Unit[] {
+  const found: Unit[] = [];
+  for (const { fret, strings } of units) {
+    const last = found[found.length - 1];
+    if (strings.length > 1) continue;
+    if (last?.fret === fret && coveredAbove(frets, [last.strings[0]!, strings[0]!], fret))
+      last.strings.push(strings[0]!);
+    else found.push({ fret, strings: [strings[0]!] });
+  }
+  return found.filter(({ strings }) => strings.length > 1);
 }
 
 /** Whether every string between the outer ones is stopped at this fret or higher, or silent. */

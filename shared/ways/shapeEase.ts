@@ -6,6 +6,8 @@ export interface ShapeLoad {
   barreStrings: number;
   /** fret of the barre, 0 for none */
   barreFret: number;
+  /** true if another finger than the first lies across strings */
+  laterBarre: boolean;
   /** lowest stopped fret, 0 if all is open */
   lowestFret: number;
   hasOpen: boolean;
@@ -35,7 +37,10 @@ const tiringReachMm = 90;
  */
 export function shapeCost(load: ShapeLoad, reachMm: number, capo: number): number {
   const nearNut = (load.barreFret === 1 ? 0.1 : load.barreFret === 2 ? 0.05 : 0) * (capo > 0 ? 0.5 : 1);
-  const barre = load.barreStrings === 0 ? 0 : 0.5 + 0.15 * (load.barreStrings - 2) + nearNut * load.barreStrings;
+  const barre =
+    load.barreStrings === 0
+      ? 0
+      : 0.5 + 0.15 * (load.barreStrings - 2) + nearNut * load.barreStrings + (load.laterBarre ? 0.6 : 0);
   const height = 0.1 * Math.max(0, load.lowestFret - 1) + (load.hasOpen && load.lowestFret > 4 ? 0.7 : 0);
   const silent = 0.9 * load.innerSilent + 0.2 * load.bassSilent + 0.5 * load.trebleSilent;
   const sound = 0.3 * load.missing + (load.inverted ? 0.8 : 0);

@@ -9,7 +9,13 @@ const nextId = () => `10000000-0000-4000-8000-${String(++serial).padStart(12, "0
 const when = "2026-03-05T18:30:00.000Z";
 const band = { lowMidi: 45, highMidi: 62 };
 
-export const aVoice = (change: Partial<Voice> = {}): Voice => ({ id: nextId(), name: "Maren", byHand: null, createdAt: when, ...change });
+export const aVoice = (change: Partial<Voice> = {}): Voice => ({
+  id: nextId(),
+  name: "Maren",
+  byHand: null,
+  createdAt: when,
+  ...change,
+});
 
 export const aTake = (voiceId: string, change: Partial<Take> = {}): Take => ({
   id: nextId(),

@@ -36,7 +36,13 @@ function reply({ status, body }: Answer) {
 /** The API's contract, kept in memory, behind `fetch`. */
 export class FakeApi {
   readonly calls: string[] = [];
-  readonly tables: Record<Name, Map<string, Row>> = { voices: new Map(), takes: new Map(), songs: new Map(), decisions: new Map(), instruments: new Map() };
+  readonly tables: Record<Name, Map<string, Row>> = {
+    voices: new Map(),
+    takes: new Map(),
+    songs: new Map(),
+    decisions: new Map(),
+    instruments: new Map(),
+  };
   /** Answers in the server's place, or "down" for a network that fails. */
   intercept: (method: string, path: string) => Answer | "down" | undefined = () => undefined;
 
@@ -83,7 +89,10 @@ export class FakeApi {
     const accessToken = `access-${++this.#serial}`;
     this.#tokens.set(accessToken, personId);
     const person = this.#people.find((each) => each.id === personId);
-    return { status, body: { accessToken, expiresInS: 600, account: { id: personId, email: person?.email, role: "singer" } } };
+    return {
+      status,
+      body: { accessToken, expiresInS: 600, account: { id: personId, email: person?.email, role: "singer" } },
+    };
   }
 
   async #fetch(url: string, init: RequestInit) {
@@ -114,7 +123,12 @@ export class FakeApi {
     }
     const parsed = (path === "/auth/sign-up" ? signUpRequest : signInRequest).safeParse(body);
     if (!parsed.success)
-      return problem(422, "invalid", "Something is missing.", parsed.error.issues.map((issue) => ({ path: issue.path.join("."), message: issue.message })));
+      return problem(
+        422,
+        "invalid",
+        "Something is missing.",
+        parsed.error.issues.map((issue) => ({ path: issue.path.join("."), message: issue.message })),
+      );
     const { email, password } = parsed.data;
     const known = this.#people.find((each) => each.email === email);
     if (path === "/auth/sign-up") {
@@ -123,7 +137,8 @@ export class FakeApi {
       this.#open(id);
       return this.#session(201, id);
     }
-    if (known?.password !== password) return problem(401, "wrong-credentials", "E-mail address and password do not belong together.");
+    if (known?.password !== password)
+      return problem(401, "wrong-credentials", "E-mail address and password do not belong together.");
     this.#open(known.id);
     return this.#session(200, known.id);
   }
@@ -134,7 +149,8 @@ export class FakeApi {
     if (owner === undefined) return problem(401, "not-signed-in", "Sign in first.");
     const [, name, id] = path.split("/") as [string, Name, string | undefined];
     const table = this.tables[name];
-    if (id === undefined) return { status: 200, body: [...table.values()].filter((row) => row.owner === owner).map((row) => row.item) };
+    if (id === undefined)
+      return { status: 200, body: [...table.values()].filter((row) => row.owner === owner).map((row) => row.item) };
     const row = table.get(id);
     if (row ? row.owner !== owner : method === "GET") return problem(404, "not-found", "This is not on your shelf.");
     if (method === "GET") return { status: 200, body: row?.item };
@@ -144,10 +160,17 @@ export class FakeApi {
     }
     const parsed = schemas[name].safeParse(body);
     if (!parsed.success)
-      return problem(422, "invalid", "Something is missing.", parsed.error.issues.map((issue) => ({ path: issue.path.join("."), message: issue.message })));
+      return problem(
+        422,
+        "invalid",
+        "Something is missing.",
+        parsed.error.issues.map((issue) => ({ path: issue.path.join("."), message: issue.message })),
+      );
     const item = parsed.data as Row["item"];
-    const missing = (target: Name, key: string) => typeof item[key] === "string" && this.tables[target].get(item[key])?.owner !== owner;
-    if (missing("voices", "voiceId") || missing("songs", "songId")) return problem(422, "unknown-reference", "This belongs to something you do not have.");
+    const missing = (target: Name, key: string) =>
+      typeof item[key] === "string" && this.tables[target].get(item[key])?.owner !== owner;
+    if (missing("voices", "voiceId") || missing("songs", "songId"))
+      return problem(422, "unknown-reference", "This belongs to something you do not have.");
     table.set(id, { owner, item });
     return { status: row ? 200 : 201, body: item };
   }

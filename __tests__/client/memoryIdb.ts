@@ -24,7 +24,10 @@ async function open<T>(work: (items: Map<string, unknown>) => T): Promise<T> {
 export const memoryIdb = {
   createStore:
     () =>
-    <T>(_mode: string, work: (store: { get(key: string): Request<unknown>; delete(key: string): void; transaction: Request<null> }) => T) =>
+    <T>(
+      _mode: string,
+      work: (store: { get(key: string): Request<unknown>; delete(key: string): void; transaction: Request<null> }) => T,
+    ) =>
       open((items) =>
         work({
           get: (key) => ({ result: copy(items.get(key)) }),

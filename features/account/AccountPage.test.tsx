@@ -12,7 +12,9 @@ import { ThemeProvider } from "@/features/ui/ThemeProvider";
 import { AccountPage } from "./AccountPage";
 
 jest.mock("idb-keyval", () => jest.requireActual<{ memoryIdb: object }>("@/__tests__/client/memoryIdb").memoryIdb);
-jest.mock("expo-router", () => ({ Link: ({ href, children }: { href: string; children: React.ReactNode }) => <a href={href}>{children}</a> }));
+jest.mock("expo-router", () => ({
+  Link: ({ href, children }: { href: string; children: React.ReactNode }) => <a href={href}>{children}</a>,
+}));
 
 const credentials = { email: "maren@orlow.example", password: "tide tables 1907" };
 let api: FakeApi;
@@ -47,7 +49,9 @@ it("tells a visitor what is on this device and offers to keep it", async () => {
   await shelf.put("voices", aVoice());
   open();
   expect((await screen.findByText(/You have 1 voice here/)).textContent).toMatch(/until you sign up/);
-  expect(screen.getByRole("link", { name: "Sign up to keep it" }).getAttribute("href")).toBe("/account/sign-up?next=%2Faccount");
+  expect(screen.getByRole("link", { name: "Sign up to keep it" }).getAttribute("href")).toBe(
+    "/account/sign-up?next=%2Faccount",
+  );
 });
 
 it("tells a visitor who did nothing yet what an account is for", async () => {
@@ -108,7 +112,11 @@ it("names what could not move, and why", async () => {
   open();
   const notice = await screen.findByTestId("move-in");
   await waitFor(() =>
-    expect(within(notice).getAllByRole("listitem").map((each) => each.textContent)).toEqual([
+    expect(
+      within(notice)
+        .getAllByRole("listitem")
+        .map((each) => each.textContent),
+    ).toEqual([
       "Without a title: Give the song a title.",
       "The key you chose for a song: What it belongs to stayed here.",
     ]),

@@ -25,7 +25,12 @@ function Person() {
         onRetry={() => void sessionStore.settled().catch(() => undefined)}
       />
     );
-  return <Skeleton bars={[{ height: 24, width: 160 }, { width: "60%" }, { height: 48, width: 120 }]} words="Looking whether you are signed in" />;
+  return (
+    <Skeleton
+      bars={[{ height: 24, width: 160 }, { width: "60%" }, { height: 48, width: 120 }]}
+      words="Looking whether you are signed in"
+    />
+  );
 }
 
 /** Account and settings. */
@@ -34,7 +39,14 @@ export function AccountPage() {
   const wide = useLayout() === "wide";
   const column = wide ? ({ flexBasis: 0, flexGrow: 1, gap: 16 } as const) : ({ gap: 16 } as const);
   return (
-    <View style={{ maxWidth: wide ? 1080 : 560, width: "100%", gap: wide ? 32 : 16, flexDirection: wide ? "row" : "column" }}>
+    <View
+      style={{
+        maxWidth: wide ? 1080 : 560,
+        width: "100%",
+        gap: wide ? 32 : 16,
+        flexDirection: wide ? "row" : "column",
+      }}
+    >
       <View style={column}>
         {status === "signed-in" && <MoveInNotice />}
         <Person />

@@ -96,7 +96,13 @@ export function CredentialsForm(props: CredentialsFormProps) {
           )}
         />
         <View style={{ alignSelf: "flex-start", marginLeft: -8 }}>
-          <Button kind="text" small label={shown ? "Hide password" : "Show password"} onPress={() => setShown(!shown)} testID="show-password" />
+          <Button
+            kind="text"
+            small
+            label={shown ? "Hide password" : "Show password"}
+            onPress={() => setShown(!shown)}
+            testID="show-password"
+          />
         </View>
       </View>
       {props.children}
@@ -105,7 +111,13 @@ export function CredentialsForm(props: CredentialsFormProps) {
           {refusal.code === "offline" ? `${refusal.message} What you typed is still here.` : refusal.message}
         </Notice>
       )}
-      <Button submit label={entering ? busyLabel : props.sendLabel} busy={entering} onPress={() => undefined} testID="send" />
+      <Button
+        submit
+        label={entering ? busyLabel : props.sendLabel}
+        busy={entering}
+        onPress={() => undefined}
+        testID="send"
+      />
       <LiveText hidden>{entering ? busyLabel : ""}</LiveText>
     </Form>
   );

@@ -40,7 +40,8 @@ const open = (kind: EntryKind, next?: string) =>
     </QueryClientProvider>,
   );
 
-const type = (label: string, text: string) => fireEvent.change(screen.getByLabelText(label), { target: { value: text } });
+const type = (label: string, text: string) =>
+  fireEvent.change(screen.getByLabelText(label), { target: { value: text } });
 const value = (label: string) => (screen.getByLabelText(label) as HTMLInputElement).value;
 
 function fillAndSend(form: "Sign up" | "Sign in", typed = { email, password }) {

@@ -32,7 +32,9 @@ export function EntryPage({ kind, next }: EntryPageProps) {
   const form = up ? <SignUpForm entry={entry} /> : <SignInForm entry={entry} />;
   return (
     <View style={{ maxWidth: 480, width: "100%", gap: 20 }}>
-      {session.ended && <Notice kind="caution">Your session has ended. Sign in again to see your shelf; nothing is lost.</Notice>}
+      {session.ended && (
+        <Notice kind="caution">Your session has ended. Sign in again to see your shelf; nothing is lost.</Notice>
+      )}
       <Text variant="body">
         {up
           ? "With an account your voices, songs and keys are kept, and you find them on every device you sign in on."

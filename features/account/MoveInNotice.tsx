@@ -8,7 +8,16 @@ import { Text } from "@/features/ui/Text";
 /** How the move from this device into the account went, where the person has to know. */
 export function MoveInNotice() {
   const { status, moved, total, stayed } = useSyncExternalStore(moveIn.subscribe, moveIn.state, moveIn.state);
-  const again = <Button kind="secondary" small icon="again" label="Move the rest now" onPress={() => void moveIn.resume()} testID="move-again" />;
+  const again = (
+    <Button
+      kind="secondary"
+      small
+      icon="again"
+      label="Move the rest now"
+      onPress={() => void moveIn.resume()}
+      testID="move-again"
+    />
+  );
   if (status === "moving")
     return (
       <Notice kind="good" testID="move-in">
@@ -39,7 +48,9 @@ export function MoveInNotice() {
   if (moved > 0)
     return (
       <Notice kind="good" testID="move-in">
-        {moved === 1 ? "1 thing moved from this device into your account." : `${moved} things moved from this device into your account.`}
+        {moved === 1
+          ? "1 thing moved from this device into your account."
+          : `${moved} things moved from this device into your account.`}
       </Notice>
     );
   return null;

@@ -12,7 +12,8 @@ export function MovesIn() {
   return (
     <View testID="moves-in">
       <Text variant="small">
-        What you did here moves into your account: {words}.{data.takes > 0 ? " The sound of a take stays on this device." : ""}
+        What you did here moves into your account: {words}.
+        {data.takes > 0 ? " The sound of a take stays on this device." : ""}
       </Text>
     </View>
   );

@@ -42,7 +42,14 @@ export function SignedInCard({ account }: { account: Account }) {
         </Notice>
       )}
       <View style={{ alignSelf: "flex-start" }}>
-        <Button kind="secondary" small label={busy ? "Signing out" : "Sign out"} busy={busy} onPress={() => void signOut()} testID="sign-out" />
+        <Button
+          kind="secondary"
+          small
+          label={busy ? "Signing out" : "Sign out"}
+          busy={busy}
+          onPress={() => void signOut()}
+          testID="sign-out"
+        />
       </View>
     </Card>
   );

@@ -15,7 +15,9 @@ export function VisitorCard({ ended }: { ended: boolean }) {
   return (
     <Card style={{ gap: 12 }}>
       <Heading level={2}>{words ? "On this device" : "Without an account"}</Heading>
-      {ended && <Notice kind="caution">Your session has ended. Sign in again to see your shelf; nothing is lost.</Notice>}
+      {ended && (
+        <Notice kind="caution">Your session has ended. Sign in again to see your shelf; nothing is lost.</Notice>
+      )}
       {error ? (
         <Notice kind="caution">{error.message}</Notice>
       ) : (
@@ -26,8 +28,19 @@ export function VisitorCard({ ended }: { ended: boolean }) {
         </Text>
       )}
       <View style={{ flexDirection: "row", flexWrap: "wrap", gap: 12 }}>
-        <LinkButton small label={words ? "Sign up to keep it" : "Sign up"} href="/account/sign-up?next=%2Faccount" testID="to-sign-up" />
-        <LinkButton small kind="secondary" label="Sign in" href="/account/sign-in?next=%2Faccount" testID="to-sign-in" />
+        <LinkButton
+          small
+          label={words ? "Sign up to keep it" : "Sign up"}
+          href="/account/sign-up?next=%2Faccount"
+          testID="to-sign-up"
+        />
+        <LinkButton
+          small
+          kind="secondary"
+          label="Sign in"
+          href="/account/sign-in?next=%2Faccount"
+          testID="to-sign-in"
+        />
       </View>
     </Card>
   );

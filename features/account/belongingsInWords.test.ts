@@ -6,7 +6,10 @@ it.each([
   [none, null],
   [{ ...none, voices: 1 }, "1 voice"],
   [{ ...none, voices: 2, takes: 1 }, "2 voices and 1 take"],
-  [{ voices: 1, takes: 3, songs: 2, decisions: 1, instruments: 1 }, "1 voice, 3 takes, 2 songs, 1 chosen key and 1 instrument"],
+  [
+    { voices: 1, takes: 3, songs: 2, decisions: 1, instruments: 1 },
+    "1 voice, 3 takes, 2 songs, 1 chosen key and 1 instrument",
+  ],
 ])("%j is %j", (counts, words) => {
   expect(belongingsInWords(counts)).toBe(words);
 });

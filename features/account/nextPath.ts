@@ -10,6 +10,7 @@ export function nextPath(wanted: string | string[] | undefined): string {
   } catch {
     return "/";
   }
-  if (url.origin !== here || url.pathname.startsWith("//") || /^\/account\/sign-(in|up)\/?$/.test(url.pathname)) return "/";
+  if (url.origin !== here || url.pathname.startsWith("//") || /^\/account\/sign-(in|up)\/?$/.test(url.pathname))
+    return "/";
   return url.pathname + url.search + url.hash;
 }

@@ -23,7 +23,9 @@ it("replaces by id, without touching what another tab put meanwhile", async () =
   const [mine, theirs] = [aSong(), aSong()];
   await deviceShelf.put("songs", mine);
   await Promise.all([deviceShelf.put("songs", { ...mine, title: "Second draft" }), deviceShelf.put("songs", theirs)]);
-  expect((await deviceShelf.list("songs")).map((song) => song.title).sort()).toEqual(["Second draft", theirs.title].sort());
+  expect((await deviceShelf.list("songs")).map((song) => song.title).sort()).toEqual(
+    ["Second draft", theirs.title].sort(),
+  );
 });
 
 it("rejects with not-found for what is not there, and removes it without complaint", async () => {
@@ -32,8 +34,13 @@ it("rejects with not-found for what is not there, and removes it without complai
 });
 
 it("refuses references that lead nowhere, like the server", async () => {
-  await expect(deviceShelf.put("takes", aTake(aVoice().id))).rejects.toMatchObject({ status: 422, code: "unknown-reference" });
-  await expect(deviceShelf.put("decisions", aDecision(aSong().id, null))).rejects.toMatchObject({ code: "unknown-reference" });
+  await expect(deviceShelf.put("takes", aTake(aVoice().id))).rejects.toMatchObject({
+    status: 422,
+    code: "unknown-reference",
+  });
+  await expect(deviceShelf.put("decisions", aDecision(aSong().id, null))).rejects.toMatchObject({
+    code: "unknown-reference",
+  });
 });
 
 it("removes takes with their voice and decisions with their song", async () => {
@@ -75,7 +82,10 @@ it("knows a demonstration song as it came from one that was worked on", async ()
 
 it("says in words that the browser keeps nothing, and that the device is full", async () => {
   refuseStorage(new DOMException("denied", "SecurityError"));
-  await expect(deviceShelf.list("songs")).rejects.toMatchObject({ code: "no-storage", message: expect.stringMatching(/private window/) });
+  await expect(deviceShelf.list("songs")).rejects.toMatchObject({
+    code: "no-storage",
+    message: expect.stringMatching(/private window/),
+  });
   refuseStorage(new DOMException("full", "QuotaExceededError"));
   await expect(deviceShelf.put("voices", aVoice())).rejects.toMatchObject({ code: "device-full" });
 });

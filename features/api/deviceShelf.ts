@@ -19,7 +19,7 @@ const unknownReference = (what: string) =>
 const contentOf = (song: Items["songs"]) => ({ ...song, id: null, createdAt: null });
 
 /** Keeps a visitor's belongings on this device. Refuses the same references as the server. */
-export function createDeviceShelf(storage: DeviceStorage): DeviceShelf {
+function createDeviceShelf(storage: DeviceStorage): DeviceShelf {
   const list = async <C extends Collection>(name: C): Promise<Items[C][]> =>
     (await storage.entries()).filter(([key]) => key.startsWith(`${name}/`)).map(([, item]) => item as Items[C]);
 
@@ -55,12 +55,14 @@ export function createDeviceShelf(storage: DeviceStorage): DeviceShelf {
     async remove(name, id) {
       const gone = [keyOf(name, id)];
       if (name === "songs") {
-        for (const decision of await list("decisions")) if (decision.songId === id) gone.push(keyOf("decisions", decision.id));
+        for (const decision of await list("decisions"))
+          if (decision.songId === id) gone.push(keyOf("decisions", decision.id));
       }
       if (name === "voices") {
         for (const take of await list("takes")) if (take.voiceId === id) gone.push(keyOf("takes", take.id));
         for (const decision of await list("decisions"))
-          if (decision.voiceId === id) await storage.set(keyOf("decisions", decision.id), { ...decision, voiceId: null });
+          if (decision.voiceId === id)
+            await storage.set(keyOf("decisions", decision.id), { ...decision, voiceId: null });
       }
       await storage.delete(gone);
     },

@@ -13,7 +13,11 @@ export interface DeviceStorage {
 
 function refusal(error: unknown): ApiError {
   if (error instanceof DOMException && error.name === "QuotaExceededError")
-    return new ApiError(0, "device-full", "This device has no room left. Free some space and try again; what was kept before is safe.");
+    return new ApiError(
+      0,
+      "device-full",
+      "This device has no room left. Free some space and try again; what was kept before is safe.",
+    );
   return new ApiError(
     0,
     "no-storage",

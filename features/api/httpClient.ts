@@ -41,7 +41,11 @@ async function problemOf(answer: Response): Promise<ApiError> {
     return new ApiError(answer.status, body.code, body.message, Array.isArray(body.fields) ? body.fields : []);
   // A proxy in between answers with these when the server itself is away.
   if (answer.status >= 502 && answer.status <= 504) return ApiError.offline();
-  return new ApiError(answer.status, "unexpected", "Something went wrong at our end. What you entered is still here; try again.");
+  return new ApiError(
+    answer.status,
+    "unexpected",
+    "Something went wrong at our end. What you entered is still here; try again.",
+  );
 }
 
 async function send(method: string, path: string, body: unknown, token: string | null): Promise<Response> {

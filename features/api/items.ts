@@ -16,7 +16,13 @@ export interface Items {
 export type Collection = keyof Items;
 
 /** Parents stand before what refers to them. */
-export const collections = ["voices", "takes", "songs", "decisions", "instruments"] as const satisfies readonly Collection[];
+export const collections = [
+  "voices",
+  "takes",
+  "songs",
+  "decisions",
+  "instruments",
+] as const satisfies readonly Collection[];
 
 /** One person's belongings, wherever they are kept. Everything rejects with ApiError only. */
 export interface Shelf {

@@ -61,7 +61,9 @@ it("keeps on the device what was not acknowledged, and finishes at the next star
   await session.signUp(credentials);
   api.intercept = (_, path) => (path.startsWith("/songs") ? "down" : undefined);
   expect(await moveIn.afterSignUp()).toMatchObject({ status: "stopped", moved: 2, total: 5 });
-  expect(onDevice().sort()).toEqual([`songs/${song.id}`, `decisions/${decision.id}`, `instruments/${instrument.id}`].sort());
+  expect(onDevice().sort()).toEqual(
+    [`songs/${song.id}`, `decisions/${decision.id}`, `instruments/${instrument.id}`].sort(),
+  );
 
   api.intercept = () => undefined;
   expect(await moveIn.resume()).toMatchObject({ status: "done", moved: 3, total: 3 });
@@ -93,11 +95,18 @@ it("leaves a refused item and what belongs to it on the device, says why, and go
   const outcome = await moveIn.afterSignUp();
   expect(outcome.stayed).toEqual([
     { name: "songs", id: song.id, title: "   ", reason: "Give the song a title." },
-    { name: "decisions", id: decision.id, title: "The key you chose for a song", reason: "What it belongs to stayed here." },
+    {
+      name: "decisions",
+      id: decision.id,
+      title: "The key you chose for a song",
+      reason: "What it belongs to stayed here.",
+    },
   ]);
   expect(outcome).toMatchObject({ status: "done", moved: 3 });
   expect(onDevice().sort()).toEqual([`decisions/${decision.id}`, `songs/${song.id}`]);
-  expect(api.tables.voices.has(voice.id) && api.tables.takes.has(take.id) && api.tables.instruments.has(instrument.id)).toBe(true);
+  expect(
+    api.tables.voices.has(voice.id) && api.tables.takes.has(take.id) && api.tables.instruments.has(instrument.id),
+  ).toBe(true);
   expect(puts().some((call) => call.includes("/decisions/"))).toBe(false);
 });
 
@@ -105,7 +114,10 @@ it("does not overwrite another account's item of the same id", async () => {
   const { song } = await singAndDecide();
   api.tables.songs.set(song.id, { owner: "somebody else", item: { ...song, title: "Theirs" } });
   await session.signUp(credentials);
-  expect((await moveIn.afterSignUp()).stayed[0]).toMatchObject({ id: song.id, reason: "It belongs to another account." });
+  expect((await moveIn.afterSignUp()).stayed[0]).toMatchObject({
+    id: song.id,
+    reason: "It belongs to another account.",
+  });
   expect(api.tables.songs.get(song.id)?.item.title).toBe("Theirs");
 });
 
@@ -113,7 +125,8 @@ it("keeps an edit that another tab made while its item was on the way", async ()
   const { song } = await singAndDecide();
   await session.signUp(credentials);
   api.intercept = (method, path) => {
-    if (method === "PUT" && path === `/songs/${song.id}`) kept.set(`songs/${song.id}`, { ...song, title: "Edited meanwhile" });
+    if (method === "PUT" && path === `/songs/${song.id}`)
+      kept.set(`songs/${song.id}`, { ...song, title: "Edited meanwhile" });
     return undefined;
   };
   await moveIn.afterSignUp();

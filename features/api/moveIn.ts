@@ -7,7 +7,7 @@ import { serverShelf } from "./serverShelf";
 import { session } from "./session";
 
 /** An item that stayed on the device, and why, in words. */
-export interface StayedBehind {
+interface StayedBehind {
   name: Collection;
   id: string;
   title: string;
@@ -87,7 +87,8 @@ async function moveAll(entry: Entry): Promise<void> {
 
   for (const name of collections)
     for (const item of belongings.items[name]) {
-      if (session.current().account?.id !== owner) throw new ApiError(401, "no-session", "You signed out while your things were moving.");
+      if (session.current().account?.id !== owner)
+        throw new ApiError(401, "no-session", "You signed out while your things were moving.");
       await moveOne(name, item);
       publish({ stayed: [...stayed.values()] });
     }

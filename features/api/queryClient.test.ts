@@ -44,7 +44,14 @@ it("asks anew for what is on screen and drops the rest when the person changes",
 it("does not repeat a refused request, and repeats one at which the server stumbled", async () => {
   const attempts = async (error: ApiError) => {
     const ask = jest.fn().mockRejectedValue(error);
-    await expect(queryClient.fetchQuery({ queryKey: [error.code], queryFn: ask, retry: queryClient.getDefaultOptions().queries?.retry ?? false, retryDelay: 0 })).rejects.toBe(error);
+    await expect(
+      queryClient.fetchQuery({
+        queryKey: [error.code],
+        queryFn: ask,
+        retry: queryClient.getDefaultOptions().queries?.retry ?? false,
+        retryDelay: 0,
+      }),
+    ).rejects.toBe(error);
     return ask.mock.calls.length;
   };
   expect(await attempts(ApiError.notFound())).toBe(1);

@@ -91,7 +91,8 @@ describe("an access token that ran out", () => {
   it("leads to one more try only", async () => {
     const { http, session } = openPage();
     await session.signUp({ email, password });
-    api.intercept = (method) => (method === "GET" ? { status: 401, body: { code: "not-signed-in", message: "Sign in first." } } : undefined);
+    api.intercept = (method) =>
+      method === "GET" ? { status: 401, body: { code: "not-signed-in", message: "Sign in first." } } : undefined;
     api.calls.length = 0;
     await expect(http.get("/songs")).rejects.toMatchObject({ status: 401, code: "not-signed-in" });
     expect(api.calls).toEqual(["GET /songs", "POST /auth/refresh", "GET /songs"]);

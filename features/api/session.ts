@@ -84,8 +84,10 @@ export const session = {
     return () => void listeners.delete(listener);
   },
   settled,
-  signUp: async (request: SignUpRequest) => signedIn(await http.authenticate<SessionResponse>("/auth/sign-up", request)),
-  signIn: async (request: SignInRequest) => signedIn(await http.authenticate<SessionResponse>("/auth/sign-in", request)),
+  signUp: async (request: SignUpRequest) =>
+    signedIn(await http.authenticate<SessionResponse>("/auth/sign-up", request)),
+  signIn: async (request: SignInRequest) =>
+    signedIn(await http.authenticate<SessionResponse>("/auth/sign-in", request)),
   signOut,
   followOtherTabs,
 };

@@ -3,5 +3,5 @@ import { SingScreen } from "@/features/voice/SingScreen";
 
 export default function SingRoute() {
   const router = useRouter();
-  return <SingScreen onKept={() => router.replace("/voice")} />;
+  return <SingScreen onKept={(next) => router.replace(next === "songs" ? "/songs" : "/voice")} />;
 }

@@ -7,7 +7,7 @@ import { Form } from "@/features/ui/Form";
 import { IconButton } from "@/features/ui/IconButton";
 import { Notice } from "@/features/ui/Notice";
 import { Text } from "@/features/ui/Text";
-import { parseNoteName, plainAccidentals } from "@/shared/music/pitch";
+import { noteName, parseNoteName } from "@/shared/music/pitch";
 import type { SingingVoice } from "@/shared/keys/keyScore";
 import { readByHand, usualComfort, type ByHandFields } from "./byHand";
 import { NoteLadder } from "./NoteLadder";
@@ -48,7 +48,7 @@ export function ByHandForm({ voice, busy, refusal, onKeep }: ByHandFormProps) {
   const [active, setActive] = useState<keyof ByHandFields>("lowest");
   const values = watch();
   const set = (name: keyof ByHandFields, midi: number) => {
-    setValue(name, noteWord(midi), { shouldDirty: true });
+    setValue(name, noteName(midi), { shouldDirty: true });
     if (formState.isSubmitted || formState.errors[name]) void trigger();
   };
   const step = (name: keyof ByHandFields, by: number) => set(name, (parseNoteName(getValues(name)) ?? startOf(name, values)) + by);
@@ -98,14 +98,15 @@ export function ByHandForm({ voice, busy, refusal, onKeep }: ByHandFormProps) {
   );
 }
 
+/** In a field, accidentals stand as they are typed. */
 function fieldsOf(voice: SingingVoice | null): ByHandFields {
   if (!voice) return { lowest: "", highest: "", comfortLow: "", comfortTop: "" };
   const { range, comfort } = voice;
   return {
-    lowest: noteWord(range.lowMidi),
-    highest: noteWord(range.highMidi),
-    comfortLow: noteWord(comfort.lowMidi),
-    comfortTop: noteWord(comfort.highMidi),
+    lowest: noteName(range.lowMidi),
+    highest: noteName(range.highMidi),
+    comfortLow: noteName(comfort.lowMidi),
+    comfortTop: noteName(comfort.highMidi),
   };
 }
 
@@ -122,8 +123,8 @@ function startOf(name: keyof ByHandFields, values: ByHandFields): number {
 }
 
 function hintFor(name: keyof ByHandFields, hint: string, values: ByHandFields): string {
-  const low = parseNoteName(plainAccidentals(values.lowest));
-  const high = parseNoteName(plainAccidentals(values.highest));
+  const low = parseNoteName(values.lowest);
+  const high = parseNoteName(values.highest);
   if (low === null || high === null || low >= high || values[name] !== "") return hint;
   const usual = usualComfort(low, high);
   if (name === "comfortLow") return `${hint}; ${noteWord(usual.lowMidi)} is assumed`;

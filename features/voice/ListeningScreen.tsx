@@ -21,7 +21,7 @@ export interface ListeningScreenProps {
 }
 
 /** Room for the head, the note, level, time and Stop; the trail has what is left. */
-const aroundTrail = 56 + 72 + 232;
+const aroundTrail = 56 + 72 + 224;
 
 /** While singing: the note, the trail, how loud and how long, and Stop under the thumb. */
 export function ListeningScreen({ live, seconds, stopping, onStop }: ListeningScreenProps) {
@@ -33,7 +33,7 @@ export function ListeningScreen({ live, seconds, stopping, onStop }: ListeningSc
       <View style={{ marginTop: 12, marginHorizontal: phone ? -sizes.gutterPhone : 0 }}>
         <LiveTrail live={live} height={Math.max(220, Math.min(560, height - aroundTrail - (phone ? 0 : 40)))} />
       </View>
-      <View style={{ gap: 14, paddingTop: 16, paddingBottom: 12, maxWidth: phone ? undefined : 560, width: "100%", marginTop: "auto" }}>
+      <View style={{ gap: 14, paddingTop: 16, maxWidth: phone ? undefined : 560, width: "100%", marginTop: "auto" }}>
         <LiveLevel live={live} />
         <TimeRow seconds={seconds} />
         <Text variant="small" tone="soft" style={{ marginTop: -6, paddingLeft: 56 }}>

@@ -21,8 +21,8 @@ import { TakeResult } from "./TakeResult";
 import { newVoice, useKeepTake, voiceQueries } from "./voiceQueries";
 
 export interface SingScreenProps {
-  /** the take is in its voice */
-  onKept: () => void;
+  /** the take is in its voice, and the singer goes on to it or to the songs */
+  onKept: (next: "voice" | "songs") => void;
 }
 
 /** From the first press to the result: one page, one step of the recorder at a time. */
@@ -38,7 +38,7 @@ export function SingScreen({ onKept }: SingScreenProps) {
   );
 }
 
-function Step({ recorder, restoring, onKept }: { recorder: Recorder; restoring: boolean; onKept: () => void }) {
+function Step({ recorder, restoring, onKept }: { recorder: Recorder; restoring: boolean; onKept: SingScreenProps["onKept"] }) {
   const { state, live, sing, stop, leave, felt } = recorder;
   switch (state.step) {
     case "idle":
@@ -57,9 +57,9 @@ function Step({ recorder, restoring, onKept }: { recorder: Recorder; restoring: 
           take={state.take}
           onAgain={sing}
           onFelt={felt}
-          onKept={() => {
+          onKept={(next) => {
             leave();
-            onKept();
+            onKept(next);
           }}
         />
       );
@@ -78,7 +78,7 @@ interface ResultProps {
   take: HeardTake;
   onAgain: () => void;
   onFelt: Recorder["felt"];
-  onKept: () => void;
+  onKept: SingScreenProps["onKept"];
 }
 
 function Result({ take, onAgain, onFelt, onKept }: ResultProps) {
@@ -86,8 +86,9 @@ function Result({ take, onAgain, onFelt, onKept }: ResultProps) {
   const chosenId = useChosenVoiceId();
   const keep = useKeepTake();
   const [first] = useState(() => newVoice("My voice"));
-  const [choosing, setChoosing] = useState(false);
-  const keepIn = (voice: Voice) => keep.mutate({ heard: take, voice }, { onSuccess: onKept });
+  const [choosing, setChoosing] = useState<"voice" | "songs" | null>(null);
+  const keepIn = (voice: Voice, next: "voice" | "songs") => keep.mutate({ heard: take, voice }, { onSuccess: () => onKept(next) });
+  const startKeeping = (next: "voice" | "songs") => (many ? setChoosing(next) : keepIn(first, next));
   const many = (voices.data ?? []).length > 0;
   const when = [whenWords(take.sungAt), warmedWords(take.warmedUp)].filter((fact) => fact !== null).join(", ");
   return (
@@ -97,13 +98,13 @@ function Result({ take, onAgain, onFelt, onKept }: ResultProps) {
       crumb={{ label: "Voice", href: "/voice" }}
       wide
       footer={
-        choosing ? null : (
+        choosing !== null ? null : (
           <View style={{ flexDirection: "row", gap: 10 }}>
             <Button kind="secondary" icon="again" label="Sing again" onPress={onAgain} testID="sing-again" />
             <Button
               label="Keep this voice"
               busy={keep.isPending || voices.isPending}
-              onPress={() => (many ? setChoosing(true) : keepIn(first))}
+              onPress={() => startKeeping("voice")}
               style={{ flexGrow: 1 }}
               testID="sing-keep"
             />
@@ -117,10 +118,16 @@ function Result({ take, onAgain, onFelt, onKept }: ResultProps) {
             {`${keep.error.message} This take is still here.`}
           </Notice>
         )}
-        {choosing && (
-          <KeepTake voices={voices.data ?? []} chosenId={chosenId} busy={keep.isPending} onKeep={keepIn} onCancel={() => setChoosing(false)} />
+        {choosing !== null && (
+          <KeepTake
+            voices={voices.data ?? []}
+            chosenId={chosenId}
+            busy={keep.isPending}
+            onKeep={(voice) => keepIn(voice, choosing)}
+            onCancel={() => setChoosing(null)}
+          />
         )}
-        <TakeResult take={take} onAgain={onAgain} onFelt={onFelt} />
+        <TakeResult take={take} onAgain={onAgain} onSongs={() => startKeeping("songs")} onFelt={onFelt} />
       </View>
     </Screen>
   );

@@ -1,4 +1,4 @@
-import { View } from "react-native";
+import { Pressable, View } from "react-native";
 import { Button } from "@/features/ui/Button";
 import { Heading } from "@/features/ui/Heading";
 import { Icon } from "@/features/ui/Icon";
@@ -6,7 +6,6 @@ import { Notice } from "@/features/ui/Notice";
 import { Text } from "@/features/ui/Text";
 import { colors } from "@/features/ui/theme";
 import { useLayout } from "@/features/ui/useLayout";
-import { Pressable } from "react-native";
 import { AfterSinging } from "./AfterSinging";
 import { BandHeading } from "./BandHeading";
 import { causeWords, isInterruption } from "./failureWords";
@@ -22,18 +21,20 @@ import { reachesFarther } from "./VoicePicture";
 export interface TakeResultProps {
   take: HeardTake;
   onAgain: () => void;
+  /** keeps the take and goes on to the songs */
+  onSongs: () => void;
   onFelt: (warmedUp: boolean | null, effort: number | null) => void;
 }
 
 /** What a take says: notes, how sure, why, what next. On a wide page the ladder stands left of the words. */
-export function TakeResult({ take, onAgain, onFelt }: TakeResultProps) {
+export function TakeResult({ take, onAgain, onSongs, onFelt }: TakeResultProps) {
   const wide = useLayout() === "wide";
   const { report } = take;
   if (!report.range || !report.comfort) return null;
   const voice = { range: inTune(report.range, report.tuningCents), comfort: inTune(report.comfort, report.tuningCents) };
   const heading = <BandHeading label="Your comfortable notes" band={voice.comfort} />;
   const ladder = <VoiceLadder voice={voice} times={timeOnNotes(report.notes, report.tuningCents)} ends="held" />;
-  const words = <ResultWords take={take} onAgain={onAgain} onFelt={onFelt} />;
+  const words = <ResultWords take={take} onAgain={onAgain} onSongs={onSongs} onFelt={onFelt} />;
   if (!wide) {
     return (
       <View style={{ gap: 14 }}>
@@ -54,7 +55,7 @@ export function TakeResult({ take, onAgain, onFelt }: TakeResultProps) {
   );
 }
 
-function ResultWords({ take, onAgain, onFelt }: TakeResultProps) {
+function ResultWords({ take, onAgain, onSongs, onFelt }: TakeResultProps) {
   const { report, stoppedBy, processed } = take;
   const judged = report.notes.filter(({ sustained, clear, start, end }) => sustained || clear || end - start >= 0.15).length;
   const clear = report.notes.filter((note) => note.clear).length;
@@ -72,7 +73,7 @@ function ResultWords({ take, onAgain, onFelt }: TakeResultProps) {
         </Text>
         <NoteDots clear={clear} all={Math.max(judged, clear)} />
       </View>
-      <NextStep words={report.nextStep} onAgain={onAgain} />
+      <NextStep words={report.nextStep} onPress={wantsMore(report) ? onAgain : onSongs} />
       <Why take={take} certainty={report.certainty} reasons={others} />
       {processed.length > 0 && (
         <Notice kind="caution" testID="take-processed">
@@ -85,11 +86,16 @@ function ResultWords({ take, onAgain, onFelt }: TakeResultProps) {
   );
 }
 
-function NextStep({ words, onAgain }: { words: string; onAgain: () => void }) {
+/** The two reasons for singing on: not sure enough, or too small a part of the voice was heard. */
+function wantsMore({ certainty, range }: HeardTake["report"]): boolean {
+  return certainty < 0.5 || range === null || range.highMidi - range.lowMidi < 12;
+}
+
+function NextStep({ words, onPress }: { words: string; onPress: () => void }) {
   return (
     <Pressable
       role="button"
-      onPress={onAgain}
+      onPress={onPress}
       testID="take-next"
       style={{ flexDirection: "row", justifyContent: "space-between", alignItems: "center", gap: 12, minHeight: 48 }}
     >

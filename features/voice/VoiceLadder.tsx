@@ -16,10 +16,11 @@ export interface VoiceLadderProps {
 
 const gutters = 32;
 const widest = 460;
+const narrowest = 280;
 
 /** The ladder of a voice: column, time on each note, and the four notes that matter by name. */
 export function VoiceLadder({ voice, times, ends }: VoiceLadderProps) {
-  const width = Math.min(widest, useWindowDimensions().width - gutters);
+  const width = Math.max(narrowest, Math.min(widest, useWindowDimensions().width - gutters));
   const range = whole(voice.range);
   const comfort = whole(voice.comfort);
   const longest = longestNote(times);

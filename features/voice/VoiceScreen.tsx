@@ -34,10 +34,10 @@ export function VoiceScreen() {
       wide
       footer={
         voice && (
-          <>
-            <LinkButton icon="mic" label="Sing again" href="/voice/sing" testID="voice-sing" />
-            <LinkButton kind="secondary" label="Set notes by hand" href={`/voice/by-hand?voice=${voice.id}`} testID="voice-by-hand" />
-          </>
+          <View style={{ flexDirection: "row", gap: 10 }}>
+            <LinkButton kind="secondary" label="Set by hand" href={`/voice/by-hand?voice=${voice.id}`} testID="voice-by-hand" />
+            <LinkButton icon="mic" label="Sing again" href="/voice/sing" style={{ flexGrow: 1 }} testID="voice-sing" />
+          </View>
         )
       }
     >

@@ -31,8 +31,10 @@ export interface KeyFinding {
 
 /** Below this the two best keys cannot honestly be told apart. */
 export const closeMargin = 0.05;
-/** Steepness of belief: a lead of this much makes a key e times as likely as the next. */
+/** Steepness of belief: with much to go by, a lead of this much makes a key e times as likely as the next. */
 const temperature = 0.05;
+/** With this many chords the belief is half as steep; a note tells a third of what a chord does. */
+const fewChords = 8;
 const modes = ["major", "minor"] as const;
 
 /**
@@ -73,9 +75,11 @@ export function findKey(evidence: KeyEvidence): KeyFinding | null {
   const [best, next, ...others] = rankKeys(evidence);
   if (!best || !next) return null;
   const margin = best.score - next.score;
-  const beliefs = [best, next, ...others].map(({ score }) => Math.exp((score - best.score) / temperature));
-  const confidence = 1 / beliefs.reduce((sum, belief) => sum + belief, 0);
   const tokens = evidence.chart ? chartTokens(evidence.chart) : [];
+  const heard = tokens.filter((token) => token.chord).length + (evidence.notes?.length ?? 0) / 3;
+  const spread = temperature * (1 + fewChords / heard);
+  const beliefs = [best, next, ...others].map(({ score }) => Math.exp((score - best.score) / spread));
+  const confidence = 1 / beliefs.reduce((sum, belief) => sum + belief, 0);
   const { tonic, mode } = best.key;
   const pc = tonicPitchClass(tonic);
   const reasons = [

@@ -1,5 +1,5 @@
 import type { Song } from "@/shared/contract/song";
-import { chordsIn, keyInHand, keyRowsOf, writtenKeyOf } from "./songKeys";
+import { askedKey, chordsIn, keyInHand, keyRowsOf, writtenKeyOf } from "./songKeys";
 import { decide } from "./decide";
 
 const song: Song = {
@@ -49,4 +49,17 @@ test("a tune without a chart's key stands in its home note", () => {
   expect(writtenKeyOf({ ...song, writtenKey: null })).toEqual({ tonic: "G", mode: "major" });
   expect(writtenKeyOf({ writtenKey: null, tune: null })).toBeNull();
   expect(keyInHand({ ...song, writtenKey: null, tune: null }, null, null)).toBeNull();
+});
+
+test.each([
+  ["C", "-7", "C", -7],
+  ["C#", "-6", "C#", -6],
+  ["E", "-7", "C", -7],
+  [undefined, "-6", "Db", -6],
+  ["C", undefined, "D", -5],
+  ["C", "far", "D", -5],
+  ["C", "99", "D", -5],
+])("an address asking for key %s and move %s gets %s", (tonic, shift, key, move) => {
+  const inHand = keyInHand(song, null, decision);
+  expect(askedKey(song, inHand, tonic, shift)).toEqual({ key: { tonic: key, mode: "major" }, shift: move });
 });

@@ -4,6 +4,7 @@ import type { SingingVoice } from "@/shared/keys/keyScore";
 import { scoreKeys } from "@/shared/keys/scoreKeys";
 import { parseChord, transposeChord } from "@/shared/music/chord";
 import { type KeyName, tonicPitchClass } from "@/shared/music/keyName";
+import { movedKey } from "@/shared/music/keyWords";
 import { chartChords, parseChart } from "@/shared/songs/chart";
 import { stillFits } from "./decide";
 import { keyRows, rowOf, type KeyRow } from "./keyRows";
@@ -60,4 +61,16 @@ export function keyInHand(song: Song, rows: readonly KeyRow[] | null, decision: 
   const best = rows?.[0];
   if (best) return { key: best.key, shift: best.shift, row: best, because: "best" };
   return { key: written, shift: 0, row: null, because: "written" };
+}
+
+/** The key that an address asks for; the key in hand where it asks for none, or for one that cannot be read. */
+export function askedKey(song: Song, inHand: KeyInHand | null, tonic: string | undefined, shift: string | undefined): { key: KeyName; shift: number } {
+  const written = writtenKeyOf(song) ?? { tonic: "C", mode: "major" };
+  const semitones = shift !== undefined && /^-?\d{1,2}$/.test(shift) ? Number(shift) : null;
+  if (semitones !== null && Math.abs(semitones) <= 48) {
+    const moved = movedKey(written, semitones);
+    const named = tonic !== undefined && /^[A-G][#b]?$/.test(tonic) && tonicPitchClass(tonic) === tonicPitchClass(moved.tonic);
+    return { key: named ? { ...moved, tonic } : moved, shift: semitones };
+  }
+  return inHand ? { key: inHand.key, shift: inHand.shift } : { key: written, shift: 0 };
 }

@@ -1,0 +1,56 @@
+import { useQuery } from "@tanstack/react-query";
+import { useLocalSearchParams } from "expo-router";
+import { useMemo } from "react";
+import { InstrumentSelect } from "@/features/instruments/InstrumentSelect";
+import { stringWords } from "@/features/instruments/myInstruments";
+import { useInstrument } from "@/features/instruments/useInstrument";
+import { KeysScreen } from "@/features/keys/KeysScreen";
+import { songChords, writtenKeyOf } from "@/features/keys/songKeys";
+import { useSongKeys } from "@/features/keys/useSongKeys";
+import { SongState } from "@/features/songs/SongState";
+import { songQueries } from "@/features/songs/songQueries";
+import { useLayout } from "@/features/ui/useLayout";
+import { useSingingVoice } from "@/features/voice/useSingingVoice";
+import { useBestWays } from "@/features/ways/wayQueries";
+import { shortCost, shortWay } from "@/features/ways/wayWords";
+import { useWishes } from "@/features/ways/wishes";
+import type { Song } from "@/shared/contract/song";
+
+export default function KeysRoute() {
+  const { id } = useLocalSearchParams<{ id: string }>();
+  return (
+    <SongState query={useQuery(songQueries.detail(id))} title="Keys for your voice">
+      {(song) => <Keys song={song} />}
+    </SongState>
+  );
+}
+
+function Keys({ song }: { song: Song }) {
+  const { voice, singing, isPending } = useSingingVoice();
+  const { instrument, owned, choose } = useInstrument();
+  const [wishes] = useWishes();
+  const keys = useSongKeys(song, singing);
+  const wide = useLayout() === "wide";
+  const chords = useMemo(() => songChords(song), [song]);
+  const from = writtenKeyOf(song);
+  const rows = keys.rows ?? [];
+  // Only the table shows a way in every row; the phone asks for the ways of one key, on their own page.
+  const best = useBestWays(wide && from ? { chords, from, instrument, wishes } : null, rows.map((row) => row.key));
+  return (
+    <KeysScreen
+      song={song}
+      keys={keys}
+      pending={isPending}
+      voice={voice}
+      wayOf={(row) => {
+        const way = best[rows.indexOf(row)];
+        return way ? { title: shortWay(way), cost: shortCost(way) } : way;
+      }}
+      instrument={{
+        id: instrument.id,
+        strings: stringWords(instrument),
+        chooser: <InstrumentSelect inline owned={owned} value={instrument.id} onChange={choose} />,
+      }}
+    />
+  );
+}

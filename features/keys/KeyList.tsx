@@ -1,0 +1,66 @@
+import { useState } from "react";
+import { Pressable, View } from "react-native";
+import { VoiceStrip, VoiceStripHeader } from "@/features/span/VoiceStrip";
+import { Button } from "@/features/ui/Button";
+import { Text } from "@/features/ui/Text";
+import { colors, fonts } from "@/features/ui/theme";
+import { webProps } from "@/features/ui/webStyle";
+import type { SingingVoice } from "@/shared/keys/keyScore";
+import { commonScale, spellingIn, type KeyRow } from "./keyRows";
+
+export interface KeyListProps {
+  /** best first */
+  rows: readonly KeyRow[];
+  /** on whole semitones */
+  voice: SingingVoice;
+  selected: KeyRow;
+  onSelect: (row: KeyRow) => void;
+}
+
+const nextShown = 4;
+
+/** The other keys in short rows: the next four, or all twelve. A press brings a key's card to the front. */
+export function KeyList({ rows, voice, selected, onSelect }: KeyListProps) {
+  const [all, setAll] = useState(false);
+  const shown = all ? rows : rows.filter((row) => row !== selected).slice(0, nextShown);
+  const scale = commonScale(shown.filter((row) => !row.beyond), voice);
+  return (
+    <View style={{ marginTop: 12 }}>
+      <View aria-hidden style={{ flexDirection: "row", gap: 10, alignItems: "flex-end", paddingBottom: 4, borderBottomWidth: 1, borderColor: colors.line }}>
+        <Text variant="tiny" tone="soft" style={{ width: 44 }}>
+          {all ? "All" : "Next"}
+        </Text>
+        <VoiceStripHeader voice={voice} scale={scale} width={112} />
+        <Text variant="tiny" tone="soft" style={{ flexGrow: 1, textAlign: "right" }}>
+          largest reason, of 100
+        </Text>
+      </View>
+      <View role="list" testID="key-list">
+        {shown.map((row) => (
+          <View role="listitem" key={row.shift} style={{ borderBottomWidth: 1, borderColor: colors.line }}>
+            <Pressable
+              role="button"
+              aria-label={row.spoken}
+              onPress={() => onSelect(row)}
+              testID={`key-${row.key.tonic}`}
+              {...webProps({ "aria-pressed": row === selected })}
+              style={{ minHeight: 48, flexDirection: "row", gap: 10, alignItems: "center", paddingVertical: 4, backgroundColor: row === selected ? colors.card : "transparent" }}
+            >
+              <Text style={{ width: 44, fontFamily: fonts.display, fontWeight: "700", fontSize: 20, lineHeight: 24 }}>{row.sign}</Text>
+              <View aria-hidden>
+                <VoiceStrip voice={voice} marks={row.marks} scale={scale} width={112} spelling={spellingIn(row.key)} />
+              </View>
+              <Text variant="tiny" tone="soft" style={{ flexGrow: 1, flexShrink: 1, flexBasis: 0 }}>
+                {row.reason}
+              </Text>
+              <Text variant="monoBold" tone={row.beyond ? "brick" : "ink"} style={{ width: 24, textAlign: "right" }}>
+                {row.score}
+              </Text>
+            </Pressable>
+          </View>
+        ))}
+      </View>
+      <Button kind="text" icon={all ? "up" : "forward"} label={all ? "Fewer keys" : "All 12 keys"} expanded={all} onPress={() => setAll(!all)} testID="all-keys" style={{ alignSelf: "flex-start", marginLeft: -8 }} />
+    </View>
+  );
+}

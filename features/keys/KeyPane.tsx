@@ -1,0 +1,54 @@
+import { Link } from "expo-router";
+import { View } from "react-native";
+import { Heading } from "@/features/ui/Heading";
+import { Text } from "@/features/ui/Text";
+import { webStyle } from "@/features/ui/webStyle";
+import { KeyColumn } from "./KeyColumn";
+import type { KeyRow } from "./keyRows";
+import { KeysMissing } from "./KeysMissing";
+import { partWords } from "./partWords";
+import type { SongKeys } from "./useSongKeys";
+
+export interface KeyPaneProps {
+  songId: string;
+  hasTune: boolean;
+  keys: SongKeys;
+  voiceName: string | null;
+  selected: KeyRow | null;
+  onSelect: (row: KeyRow) => void;
+}
+
+/** The middle column of a wide song page. */
+export function KeyPane({ songId, hasTune, keys: { rows, voice }, voiceName, selected, onSelect }: KeyPaneProps) {
+  return (
+    <View testID="key-pane">
+      <View style={{ flexDirection: "row", justifyContent: "space-between", alignItems: "baseline", minHeight: 28, marginBottom: 10 }}>
+        <Heading level={2}>Keys</Heading>
+        {voiceName !== null && (
+          <Text variant="small" tone="soft" style={{ fontSize: 13 }}>
+            {`for ${voiceName}`}
+          </Text>
+        )}
+      </View>
+      {rows && voice ? (
+        <>
+          <KeyColumn rows={rows} voice={voice} selected={selected} onSelect={onSelect} />
+          {selected && (
+            <Text variant="small" style={{ paddingTop: 8 }}>
+              <Text style={{ fontWeight: "600" }}>{`What makes ${selected.score}: `}</Text>
+              {partWords(selected.parts)}
+              {selected.coarse ? " Coarse, because only the span of the tune is known." : ""}{" "}
+              <Link href={{ pathname: "/songs/[id]/keys", params: { id: songId } }} style={webStyle(link)} testID="all-twelve">
+                All twelve side by side
+              </Link>
+            </Text>
+          )}
+        </>
+      ) : (
+        <KeysMissing songId={songId} missing={hasTune ? "voice" : "tune"} />
+      )}
+    </View>
+  );
+}
+
+const link = { color: "var(--plum)", fontWeight: 600, textDecorationLine: "underline", textUnderlineOffset: 3 } as const;

@@ -1,0 +1,130 @@
+import { useRouter } from "expo-router";
+import { useState, type ReactNode } from "react";
+import { View } from "react-native";
+import { Button } from "@/features/ui/Button";
+import { LinkButton } from "@/features/ui/LinkButton";
+import { Notice } from "@/features/ui/Notice";
+import { Screen } from "@/features/ui/Screen";
+import { Select } from "@/features/ui/Select";
+import { Skeleton } from "@/features/ui/Skeleton";
+import { Text } from "@/features/ui/Text";
+import { useLayout } from "@/features/ui/useLayout";
+import type { Song } from "@/shared/contract/song";
+import { decidedOn } from "./decide";
+import { KeyDeck } from "./KeyDeck";
+import { KeyLegend } from "./KeyLegend";
+import { KeyList } from "./KeyList";
+import { keyOrders, sortedRows, type KeyOrder, type KeyRow } from "./keyRows";
+import { KeysMissing } from "./KeysMissing";
+import { KeyTable, type TableWay } from "./KeyTable";
+import { songWords } from "./songWords";
+import type { SongKeys } from "./useSongKeys";
+
+export interface KeysScreenProps {
+  song: Song;
+  keys: SongKeys;
+  /** the voice is still being fetched */
+  pending: boolean;
+  voice: { id: string; name: string } | null;
+  wayOf: (row: KeyRow) => TableWay;
+  /** what the ways are played on: its id, its strings in words, and the list to choose from */
+  instrument: { id: string; strings: string; chooser: ReactNode };
+}
+
+/** All twelve keys: cards and a short list on the phone, one table on the wide screen. */
+export function KeysScreen({ song, keys, pending, voice, wayOf, instrument }: KeysScreenProps) {
+  const router = useRouter();
+  const layout = useLayout();
+  const [chosen, setChosen] = useState<number | null>(null);
+  const [order, setOrder] = useState<KeyOrder>("score");
+  const { rows, decision } = keys;
+  const selected = rows?.find((row) => row.shift === chosen) ?? keys.inHand?.row ?? rows?.[0] ?? null;
+  const isMine = selected !== null && decision?.shift === selected.shift;
+  const take = (row: KeyRow, done?: () => void) =>
+    keys.take(
+      {
+        tonic: row.key.tonic,
+        shift: row.shift,
+        voiceId: voice?.id ?? null,
+        instrument: instrument.id,
+        way: isMine && decision?.instrument === instrument.id ? decision.way : null,
+      },
+      done,
+    );
+  const waysOf = (row: KeyRow) => ({ pathname: "/songs/[id]/ways" as const, params: { id: song.id, key: row.key.tonic, shift: String(row.shift) } });
+  const phone = layout === "phone";
+  const wide = layout === "wide";
+  const back = { label: song.title, href: { pathname: "/songs/[id]" as const, params: { id: song.id } } };
+  const actions = selected && (
+    <>
+      <LinkButton kind="secondary" small href={waysOf(selected)} label={`Ways to play ${selected.sign}`} />
+      <Button small disabled={isMine} busy={keys.saving} label={isMine ? `${selected.sign} is my key` : `Make ${selected.sign} my key`} onPress={() => take(selected)} testID="take-key" />
+    </>
+  );
+  return (
+    <Screen
+      title={wide ? song.title : "Keys for your voice"}
+      subtitle={wide ? songWords(song, voice?.name ?? null, keys.voice, instrument.strings) : song.title}
+      crumb={back}
+      wide
+      actions={phone ? undefined : actions}
+    >
+      {keys.error && <Notice kind="error" title="Your key is not saved">{`${keys.error.message} The keys are still here; try again.`}</Notice>}
+      {pending ? (
+        <Skeleton bars={[{ height: 372 }, { height: 56 }, { height: 48 }, { height: 48 }]} words="Scoring the keys" />
+      ) : !rows || !keys.voice || !selected ? (
+        <KeysMissing songId={song.id} missing={song.tune ? "voice" : "tune"} />
+      ) : (
+        <>
+          {selected.coarse && (
+            <Text variant="small" tone="soft" style={{ marginBottom: 8 }}>
+              Coarse: only the lowest and highest note of the tune are known, so every note between counts alike.
+            </Text>
+          )}
+          {wide ? (
+            <>
+              <View style={{ flexDirection: "row", flexWrap: "wrap", alignItems: "baseline", columnGap: 5, marginBottom: 10 }}>
+                <Text tone="soft">All twelve keys,</Text>
+                <Select inline label="Order of the keys" value={order} options={keyOrders} onChange={setOrder} testID="key-order" />
+                <Text tone="soft">, played on</Text>
+                {instrument.chooser}
+                <Text tone="soft">.</Text>
+              </View>
+              <KeyTable
+                rows={sortedRows(rows, order)}
+                voice={keys.voice}
+                selected={selected}
+                onSelect={(row) => setChosen(row.shift)}
+                order={order}
+                onOrder={setOrder}
+                wayOf={wayOf}
+                instrument={instrument.strings}
+              />
+              <KeyLegend />
+            </>
+          ) : (
+            <>
+              <KeyDeck rows={rows} voice={keys.voice} selected={selected} onSelect={(row) => setChosen(row.shift)} />
+              {phone && (
+                <Button
+                  label={`Use ${selected.sign}, see ways to play it`}
+                  busy={keys.saving}
+                  onPress={() => (isMine ? router.push(waysOf(selected)) : take(selected, () => router.push(waysOf(selected))))}
+                  testID="take-key"
+                  style={{ marginTop: 12 }}
+                />
+              )}
+              <KeyList rows={rows} voice={keys.voice} selected={selected} onSelect={(row) => setChosen(row.shift)} />
+            </>
+          )}
+          {decision && (
+            <View style={{ flexDirection: "row", flexWrap: "wrap", alignItems: "center", columnGap: 12, marginTop: 12 }}>
+              <Text variant="small" tone="soft">{`Your key was chosen on ${decidedOn(decision)}. ${decision.reason}`}</Text>
+              <Button kind="text" small label="Undo" accessibleName="Undo my key" disabled={keys.saving} onPress={keys.undo} testID="undo-key" />
+            </View>
+          )}
+        </>
+      )}
+    </Screen>
+  );
+}

@@ -1,0 +1,56 @@
+import { Link } from "expo-router";
+import { View, type TextStyle } from "react-native";
+import { VoiceStrip } from "@/features/span/VoiceStrip";
+import { Card } from "@/features/ui/Card";
+import { Icon } from "@/features/ui/Icon";
+import { Text } from "@/features/ui/Text";
+import { colors, fonts } from "@/features/ui/theme";
+import { webStyle } from "@/features/ui/webStyle";
+import type { SingingVoice } from "@/shared/keys/keyScore";
+import { keySign } from "@/shared/music/keyWords";
+import { moveWords } from "@/shared/music/moveWords";
+import { glyphs, noteName } from "@/shared/music/pitch";
+import { commonScale, spellingIn } from "./keyRows";
+import type { KeyInHand } from "./songKeys";
+
+export interface MyKeyCardProps {
+  songId: string;
+  inHand: KeyInHand;
+  /** on whole semitones; null while no voice is known */
+  voice: SingingVoice | null;
+}
+
+const before = { decided: "My key", best: "Best for your voice", written: "As written" } as const;
+
+/** The key in hand with its span, as a way to all twelve. */
+export function MyKeyCard({ songId, inHand, voice }: MyKeyCardProps) {
+  const { key, shift, row, because } = inHand;
+  const name = (midi: number) => glyphs(noteName(midi, spellingIn(key)));
+  return (
+    <Link href={{ pathname: "/songs/[id]/keys", params: { id: songId } }} testID="my-key" style={webStyle({ display: "block" })}>
+      <Card style={{ flexDirection: "row", alignItems: "center", gap: 14, paddingVertical: 12, paddingHorizontal: 14 }}>
+        <Text style={{ fontFamily: fonts.display, fontWeight: "700", fontSize: 36, lineHeight: 40 }}>{glyphs(keySign(key))}</Text>
+        <View style={{ flexGrow: 1, flexShrink: 1, flexBasis: 0, minWidth: 0, gap: 4 }}>
+          <Text variant="small">
+            <Text style={{ fontWeight: "600" }}>{before[because]}</Text>
+            {because === "written" ? ". See which key suits your voice." : `, ${moveWords(shift)}`}
+          </Text>
+          {row && voice && (
+            <View style={{ flexDirection: "row", alignItems: "center", gap: 6, flexWrap: "wrap" } as TextStyle}>
+              <Text tone="soft" style={end}>
+                {name(row.lowMidi)}
+              </Text>
+              <VoiceStrip voice={voice} marks={row.marks} scale={commonScale([row], voice)} width={160} spelling={spellingIn(key)} />
+              <Text tone="soft" style={end}>
+                {name(row.highMidi)}
+              </Text>
+            </View>
+          )}
+        </View>
+        <Icon name="forward" color={colors.plum} />
+      </Card>
+    </Link>
+  );
+}
+
+const end: TextStyle = { fontFamily: fonts.display, fontWeight: "600", fontSize: 13, lineHeight: 16 };

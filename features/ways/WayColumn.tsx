@@ -1,0 +1,46 @@
+import { Link } from "expo-router";
+import type { ReactNode } from "react";
+import { View } from "react-native";
+import { Heading } from "@/features/ui/Heading";
+import { Notice } from "@/features/ui/Notice";
+import { Text } from "@/features/ui/Text";
+import { webStyle } from "@/features/ui/webStyle";
+
+export interface WayColumnProps {
+  songId: string;
+  /** the key they lead into; null where the song has none */
+  target: { sign: string; tonic: string; shift: number } | null;
+  instrument: string;
+  list: ReactNode;
+  error: Error | null;
+}
+
+/** The right column of a wide song page. */
+export function WayColumn({ songId, target, instrument, list, error }: WayColumnProps) {
+  return (
+    <View testID="way-pane">
+      <View style={{ flexDirection: "row", flexWrap: "wrap", justifyContent: "space-between", alignItems: "baseline", columnGap: 12, minHeight: 28, marginBottom: 10 }}>
+        <Heading level={2}>{target ? `Ways to play ${target.sign}` : "Ways to play it"}</Heading>
+        <Text variant="small" tone="soft" style={{ fontSize: 13 }}>
+          {instrument}
+        </Text>
+      </View>
+      {error && <Notice kind="error" title="This is not saved">{`${error.message} Your choice is still here; try again.`}</Notice>}
+      {list}
+      {target && (
+        <Link href={{ pathname: "/songs/[id]/ways", params: { id: songId, key: target.tonic, shift: String(target.shift) } }} style={webStyle(link)}>
+          All ways, wishes and instruments
+        </Link>
+      )}
+    </View>
+  );
+}
+
+const link = {
+  display: "inline-block",
+  padding: "12px 0",
+  font: "600 14px/20px Figtree",
+  color: "var(--plum)",
+  textDecorationLine: "underline",
+  textUnderlineOffset: 3,
+} as const;

@@ -1,0 +1,79 @@
+import type { ReactNode } from "react";
+import { View } from "react-native";
+import { Heading } from "@/features/ui/Heading";
+import { Notice } from "@/features/ui/Notice";
+import { Screen } from "@/features/ui/Screen";
+import { Text } from "@/features/ui/Text";
+import { colors } from "@/features/ui/theme";
+import { useLayout } from "@/features/ui/useLayout";
+import { WishPanel } from "./WishPanel";
+
+export interface WaysScreenProps {
+  song: { id: string; title: string };
+  /** sounding key with glyphs */
+  sign: string;
+  /** name and strings, such as "Box guitar, A D F♯" */
+  instrument: string;
+  chooser: ReactNode;
+  list: ReactNode;
+  use: ReactNode;
+  /** the chart in this key */
+  chart: ReactNode;
+  /** when and why this key and way were taken; null while they are not */
+  kept: ReactNode;
+  error: Error | null;
+}
+
+/** Ways to play one song in one key; beside them, or under them on the phone, the chart in that key. */
+export function WaysScreen({ song, sign, instrument, chooser, list, use, chart, kept, error }: WaysScreenProps) {
+  const phone = useLayout() === "phone";
+  const column = { flexGrow: 1, flexShrink: 1, flexBasis: 0, minWidth: 0 } as const;
+  const main = (
+    <View style={{ gap: 8 }}>
+      {error && <Notice kind="error" title="This is not saved">{`${error.message} The ways are still here; try again.`}</Notice>}
+      {chooser}
+      <WishPanel />
+      {list}
+      {kept}
+    </View>
+  );
+  const aside = (
+    <View testID="moved-chart" style={{ gap: 10, ...(phone ? { borderTopWidth: 1, borderColor: colors.line, paddingTop: 16, marginTop: 20 } : null) }}>
+      <Heading level={2}>{`Chart in ${sign}`}</Heading>
+      {chart}
+    </View>
+  );
+  return (
+    <Screen
+      title={`Ways to play it in ${sign}`}
+      subtitle={phone ? instrument : `${song.title} · ${instrument}`}
+      crumb={{ label: song.title, href: { pathname: "/songs/[id]", params: { id: song.id } } }}
+      wide
+      footer={use ?? undefined}
+    >
+      {phone ? (
+        <>
+          {main}
+          {aside}
+        </>
+      ) : (
+        <View style={{ flexDirection: "row", gap: 32 }}>
+          <View style={column}>{main}</View>
+          <View style={column}>{aside}</View>
+        </View>
+      )}
+    </Screen>
+  );
+}
+
+/** That this is what is played now, and the way back. */
+export function KeptLine({ words, undo }: { words: string; undo: ReactNode }) {
+  return (
+    <View style={{ flexDirection: "row", flexWrap: "wrap", alignItems: "center", columnGap: 12 }}>
+      <Text variant="small" tone="soft" style={{ flexShrink: 1 }}>
+        {words}
+      </Text>
+      {undo}
+    </View>
+  );
+}

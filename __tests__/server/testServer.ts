@@ -26,11 +26,14 @@ export interface TestServer {
 }
 
 /** The real application on a database of its own. */
-export async function startTestServer(settings: Partial<Settings> = {}): Promise<TestServer> {
+export async function startTestServer(
+  settings: Partial<Settings> = {},
+  logger = createLogger("silent"),
+): Promise<TestServer> {
   const database = await createTestDatabase();
   const dataSource = await createDataSource(database.url, () => undefined).initialize();
   const nothing = mkdtempSync(path.join(tmpdir(), "larkspan-nothing-"));
-  const { app, api } = createApp(dataSource, createLogger("silent"), {
+  const { app, api } = createApp(dataSource, logger, {
     tokenSecret,
     publicOrigin: null,
     trustProxy: false,

@@ -6,7 +6,14 @@ export function createLogger(level: string): Logger {
   return pino({ level });
 }
 
-/** One line for each request. Headers and bodies, which hold tokens and passwords, are never written. */
+interface LoggedError {
+  type: string;
+  message: string;
+  stack: string;
+  code?: string;
+}
+
+/** One line for each request. Headers, bodies and the parameters of queries, which hold secrets, are never written. */
 export function requestLog(logger: Logger): RequestHandler {
   return pinoHttp({
     logger,
@@ -17,6 +24,7 @@ export function requestLog(logger: Logger): RequestHandler {
         path: req.url.split("?")[0],
       }),
       res: (res: { statusCode: number }) => ({ status: res.statusCode }),
+      err: ({ type, message, stack, code }: LoggedError) => ({ type, message, stack, code }),
     },
     customLogLevel: (_req, res, error) => (error || res.statusCode >= 500 ? "error" : "info"),
   });

@@ -1,7 +1,7 @@
 import { z } from "zod";
 
 export const tonicName = z.string().regex(/^[A-G](#|b)?$/, "Name the key by a letter from A to G, with # or b if needed.");
-export const mode = z.enum(["major", "minor", "dorian", "phrygian", "lydian", "mixolydian", "locrian"]);
+const mode = z.enum(["major", "minor", "dorian", "phrygian", "lydian", "mixolydian", "locrian"]);
 
 const melodyNote = z.strictObject({
   start: z.number().min(0),
@@ -10,7 +10,7 @@ const melodyNote = z.strictObject({
 });
 
 /** The tune of a song: all its notes, or only its span. */
-export const tune = z.discriminatedUnion("kind", [
+const tune = z.discriminatedUnion("kind", [
   z.strictObject({ kind: z.literal("melody"), notes: z.array(melodyNote).min(1).max(10_000), home: tonicName }),
   z
     .strictObject({

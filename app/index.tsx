@@ -1,6 +1,7 @@
 import { useWindowDimensions, View } from "react-native";
 import { HomeLadder } from "@/features/span/HomeLadder";
 import { Heading } from "@/features/ui/Heading";
+import { HomeSteps } from "@/features/ui/HomeSteps";
 import { LinkButton } from "@/features/ui/LinkButton";
 import { Screen } from "@/features/ui/Screen";
 import { Text } from "@/features/ui/Text";
@@ -40,19 +41,19 @@ export default function HomeRoute() {
   const wide = layout === "wide";
   return (
     <Screen title="Larkspan" brand wide>
-      <View style={{ flexDirection: "row", alignItems: "center", gap: wide ? 72 : 32, flexGrow: 1, flexWrap: "wrap" }}>
-        <View style={{ flexGrow: 1, flexShrink: 1, flexBasis: wide ? 420 : 300, maxWidth: 560, gap: 28 }}>
-          <Heading level={1} size={wide ? 52 : 36} focusable>
-            {headline}
-          </Heading>
-          <Text variant="body" tone="soft" style={{ fontSize: wide ? 18 : 16, lineHeight: wide ? 27 : 23 }}>
-            You hear a song and want to play it, but it lies too high, too low, or under chords your hands do not know yet. Larkspan listens to your voice, looks at the song, and says which key suits you and how to reach it on your instrument.
-          </Text>
-          <View style={{ alignSelf: "flex-start" }}>
-            <Start device="device" />
+      <View style={{ flexGrow: 1, justifyContent: "space-between", gap: 32 }}>
+        <View style={{ flexDirection: "row", alignItems: "center", justifyContent: "space-between", gap: wide ? 56 : 24, flexGrow: 1 }}>
+          <View style={{ flexShrink: 1, maxWidth: 600, gap: wide ? 32 : 24 }}>
+            <Heading level={1} size={wide ? 52 : 36} focusable>
+              {headline}
+            </Heading>
+            <View style={{ alignSelf: "flex-start" }}>
+              <Start device="device" />
+            </View>
           </View>
+          <HomeLadder width={wide ? Math.min(600, width - sizes.rail - 64 - 440) : 340} step={wide ? 18 : 15} />
         </View>
-        <HomeLadder width={wide ? 560 : 340} step={wide ? 18 : 15} />
+        <HomeSteps />
       </View>
     </Screen>
   );

@@ -34,7 +34,7 @@ export function KeySpan({ voice, marks, scale, perSemitone = 14.4, height = 51, 
   const thick = fine ? 4.4 : 10;
   const tallest = fine ? 26 : 36;
   const longest = Math.max(0.01, ...marks.map((mark) => mark.share));
-  const soft = seamless(height, fine ? 7 : 7);
+  const soft = seamless(height, 7);
   const sorted = [...marks].sort((a, b) => a.midi - b.midi);
   const first = sorted[0];
   const last = sorted[sorted.length - 1];

@@ -68,7 +68,7 @@ export function LadderColumn({ id, voice, scale, step, pad, x, words = [] }: Lad
         />
       )}
       {words.map((word, index) => (
-        <SvgLabel key={word} x={x + column / 2} y={softBottom - step * (2 * (words.length - index)) + step * 1.7} size={14} family="display" weight="700" anchor="middle" fill={ground}>
+        <SvgLabel key={word} x={x + column / 2} y={softBottom - step * (1.17 + 2 * (words.length - 1 - index))} size={14} family="display" weight="700" anchor="middle" fill={ground}>
           {word}
         </SvgLabel>
       ))}

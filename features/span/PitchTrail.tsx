@@ -57,7 +57,7 @@ export function PitchTrail({ frames, now, width, height, scale, frozen = false, 
           )}
         </G>
       ))}
-      <Path d={glides(notes).map(({ from, to }) => glidePath(x(from.end), y(from.midi), x(to.start), y(to.midi))).join("")} fill="none" stroke={colors.inkSoft} strokeOpacity={0.75} strokeWidth={1.5} />
+      <Path d={glides(notes).map(({ from, to }) => glidePath(x(from.end), y(from.midi) + tilt(from, x), x(to.start), y(to.midi) - tilt(to, x))).join("")} fill="none" stroke={colors.inkSoft} strokeOpacity={0.75} strokeWidth={1.5} />
       {notes.map((note) => (
         <TrailBar key={note.start} note={note} points={points} x={x} y={y} now={now} />
       ))}
@@ -122,6 +122,11 @@ function OpenEnd({ x, y }: { x: number; y: number }) {
       <Circle cx={x} cy={y} r={6} fill={colors.plum} />
     </G>
   );
+}
+
+/** How far the end of a leaning bar stands below its middle. */
+function tilt(note: TrailNote, x: (t: number) => number): number {
+  return ((x(note.end) - x(note.start)) / 2) * Math.tan((lean(note.cents) * Math.PI) / 180);
 }
 
 function glidePath(x1: number, y1: number, x2: number, y2: number): string {

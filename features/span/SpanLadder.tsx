@@ -63,10 +63,14 @@ export function SpanLadder({ voice, marks = [], leftMarks, heads, step, width, s
   const marksX = columnX + measure.column + measure.gap;
   const leftX = columnX - measure.gap;
   const shiftRoom = shift ? 56 : 0;
-  const perPercent = Math.min(lengthPerPercent(marks, rungEnd - marksX - 4 - shiftRoom), leftMarks ? lengthPerPercent(leftMarks, leftX - measure.rungs - 8) : 5.2);
+  const perPercent = Math.min(
+    lengthPerPercent(marks, rungEnd - marksX - 4 - shiftRoom, measure.perPercent),
+    leftMarks ? lengthPerPercent(leftMarks, leftX - measure.rungs - 8, measure.perPercent) : measure.perPercent,
+  );
   const rungs = Array.from({ length: shown.high - shown.low + 1 }, (_, index) => shown.high - index);
   const words = summary ?? ladderWords(voice, marks, spelling);
   const home = marks.find((mark) => mark.home)?.midi ?? shown.low + (shown.high - shown.low) / 2;
+  const headSize = width < 330 ? 11.5 : 14;
   const side = { id, voice, scale: shown, step, pad, height: measure.mark, perPercent };
 
   return (
@@ -95,6 +99,7 @@ export function SpanLadder({ voice, marks = [], leftMarks, heads, step, width, s
             </G>
           );
         })}
+        {leftMarks && <Rect x={columnX - measure.ground} y={y(shown.high) - step / 2} width={measure.column + 2 * measure.ground} height={height} fill={ground} />}
         {voice && <LadderColumn id={id} voice={voice} scale={shown} step={step} pad={pad} x={columnX} words={columnWords} />}
         {leftMarks && <LadderMarks {...side} marks={leftMarks} x={leftX} direction={-1} />}
         <LadderMarks {...side} marks={marks} x={marksX} direction={1} />
@@ -109,8 +114,8 @@ export function SpanLadder({ voice, marks = [], leftMarks, heads, step, width, s
         {labels && <LadderLabels labels={labels} y={y} x={rungEnd + 4} bracket={bracket} />}
         {heads && (
           <G>
-            <LadderHeadWords head={heads.left} x={leftX} anchor="end" />
-            <LadderHeadWords head={heads.right} x={marksX} anchor="start" />
+            <LadderHeadWords head={heads.left} x={leftX} anchor="end" size={headSize} />
+            <LadderHeadWords head={heads.right} x={marksX} anchor="start" size={headSize} />
           </G>
         )}
       </Svg>
@@ -119,13 +124,13 @@ export function SpanLadder({ voice, marks = [], leftMarks, heads, step, width, s
   );
 }
 
-function LadderHeadWords({ head, x, anchor }: { head: LadderHead; x: number; anchor: "start" | "end" }) {
+function LadderHeadWords({ head, x, anchor, size }: { head: LadderHead; x: number; anchor: "start" | "end"; size: number }) {
   return (
     <G>
-      <SvgLabel x={x} y={14} size={14} weight="500" anchor={anchor} fill={colors.ink}>
+      <SvgLabel x={x} y={14} size={size} weight="500" anchor={anchor} fill={colors.ink}>
         {head.title}
       </SvgLabel>
-      <SvgLabel x={x} y={33} size={14} weight="500" anchor={anchor} fill={head.tone === "comfort" ? colors.lagoon : colors.brick}>
+      <SvgLabel x={x} y={33} size={size} weight="500" anchor={anchor} fill={head.tone === "comfort" ? colors.lagoon : colors.brick}>
         {head.text}
       </SvgLabel>
     </G>

@@ -6,9 +6,9 @@ export type LadderStep = 18 | 15 | 12;
 
 /** What goes with each step: column, its end radius, place of names and rungs, height of marks, room round the column. */
 export const ladderMeasures = {
-  18: { column: 64, radius: 14, names: 26, rungs: 34, columnX: 44, mark: 8, gap: 8, ground: 4, font: 13, tick: 8, noteGap: 2.5 },
-  15: { column: 52, radius: 14, names: 24, rungs: 32, columnX: 42, mark: 9, gap: 8, ground: 5, font: 13, tick: 8, noteGap: 2.5 },
-  12: { column: 44, radius: 11, names: 22, rungs: 29, columnX: 38, mark: 8, gap: 6, ground: 3, font: 12, tick: 6, noteGap: 2 },
+  18: { column: 64, radius: 14, names: 26, rungs: 34, columnX: 44, mark: 8, gap: 8, ground: 4, font: 13, tick: 8, noteGap: 2.5, perPercent: 5.2 },
+  15: { column: 52, radius: 14, names: 24, rungs: 32, columnX: 42, mark: 9, gap: 8, ground: 5, font: 13, tick: 8, noteGap: 2.5, perPercent: 3.7 },
+  12: { column: 44, radius: 11, names: 22, rungs: 29, columnX: 38, mark: 8, gap: 6, ground: 3, font: 12, tick: 6, noteGap: 2, perPercent: 3.2 },
 } as const;
 
 const naturals = new Set([0, 2, 4, 5, 7, 9, 11]);
@@ -57,10 +57,19 @@ export function markLength(share: number, perPercent: number, height: number): n
   return Math.max(height, share * 100 * perPercent);
 }
 
-/** px for each per cent, so that the longest mark still fits. */
-export function lengthPerPercent(marks: readonly Pick<KeyMark, "share">[], room: number): number {
+/** px for each per cent: `usual`, or less where the longest mark would not fit into `room`. */
+export function lengthPerPercent(marks: readonly Pick<KeyMark, "share">[], room: number, usual: number): number {
   const longest = Math.max(0.01, ...marks.map((mark) => mark.share)) * 100;
-  return Math.min(5.2, room / longest);
+  return Math.min(usual, room / longest);
+}
+
+/** One scale for the rows of several keys: voice and all marks, with `air` semitones for the names at both ends. */
+export function commonScale(voice: SingingVoice, rows: readonly (readonly Pick<KeyMark, "midi">[])[], air = 3): Scale {
+  const pitches = rows.flatMap((marks) => marks.map((mark) => mark.midi));
+  return {
+    low: Math.min(Math.round(voice.range.lowMidi), ...pitches) - air,
+    high: Math.max(Math.round(voice.range.highMidi), ...pitches) + air,
+  };
 }
 
 const say = (midi: number, spelling: Spelling) => glyphs(noteName(midi, spelling));

@@ -57,7 +57,7 @@ export const sizes = {
   gutterPhone: 16,
   gutterWide: 32,
   rail: 96,
-  railMiddle: 72,
+  railMiddle: 88,
   bar: 68,
   top: 56,
   target: 48,

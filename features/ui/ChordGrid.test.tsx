@@ -1,0 +1,63 @@
+import { render, screen } from "@testing-library/react";
+import type { Shape } from "@/shared/ways/way";
+import { ChordGrid } from "./ChordGrid";
+import { cardMeasure, fretY, gridWindow, pieceMeasure, stringX } from "./chordGridGeometry";
+
+function shape(frets: (number | null)[], fingers: number[], roots: number[], barre: Shape["barre"] = null): Shape {
+  return { frets, fingers, roots, barre, reachMm: 0, ease: 1 };
+}
+
+describe("gridWindow", () => {
+  it.each([
+    ["an open shape", [0, 2, 3], { first: 1, rows: 4 }],
+    ["nothing stopped", [0, 0, null], { first: 1, rows: 4 }],
+    ["four frets from the nut", [4, 2, 3], { first: 1, rows: 4 }],
+    ["a movable shape up the neck", [5, 4, 3], { first: 3, rows: 4 }],
+    ["a shape that needs five frets", [1, 5, 3], { first: 1, rows: 5 }],
+    ["a wide shape up the neck", [7, 11, 9], { first: 7, rows: 5 }],
+  ])("shows %s", (_, frets, window) => {
+    expect(gridWindow({ frets })).toEqual(window);
+  });
+});
+
+describe("places on the grid", () => {
+  it("stand 17 by 18 apart on wide screens and 16 by 17 on cards", () => {
+    expect(stringX(1, 3, pieceMeasure, false) - stringX(0, 3, pieceMeasure, false)).toBe(17);
+    expect(stringX(1, 3, cardMeasure, false) - stringX(0, 3, cardMeasure, false)).toBe(16);
+    const window = { first: 1, rows: 4 };
+    expect(fretY(2, window, 18, pieceMeasure) - fretY(1, window, 18, pieceMeasure)).toBe(18);
+  });
+
+  it("are mirrored for left hands", () => {
+    for (const index of [0, 1, 2, 3]) expect(stringX(index, 4, pieceMeasure, true)).toBe(stringX(3 - index, 4, pieceMeasure, false));
+  });
+});
+
+describe("ChordGrid", () => {
+  it("says each string, the capo and what sounds", () => {
+    render(<ChordGrid name="A" shape={shape([4, 0, null], [3, 0, 0], [1])} strings={3} capo={3} sounds="C" stringNames={["A3", "D4", "F#4"]} />);
+    expect(screen.getByRole("img", { name: "A: A string fret 4, finger 3; D string open; F♯ string silent; capo at fret 3, frets counted from it; sounds C" })).toBeTruthy();
+  });
+
+  it("fills roots plum, rings open strings and strokes silent ones", () => {
+    const { container } = render(<ChordGrid name="D" shape={shape([null, 0, 2], [0, 0, 1], [1, 2])} strings={3} />);
+    const rings = [...container.querySelectorAll("circle")].filter((circle) => circle.getAttribute("fill") === "none");
+    expect(rings).toHaveLength(1);
+    expect(rings[0]?.getAttribute("stroke")).toBe("var(--plum)");
+    const dots = [...container.querySelectorAll("circle")].filter((circle) => circle.getAttribute("fill") === "var(--plum)");
+    expect(dots).toHaveLength(1);
+    expect(container.querySelectorAll('line[y1="7"]')).toHaveLength(1);
+  });
+
+  it("draws a barre over all its strings", () => {
+    const { container } = render(<ChordGrid name="F" shape={shape([3, 3, 3], [1, 1, 1], [1], { fret: 3, fromString: 0, toString: 2 })} strings={3} measure={pieceMeasure} />);
+    const bar = container.querySelector("rect");
+    expect(Number(bar?.getAttribute("width"))).toBeCloseTo(2 * 17 + 2 * 7.6, 6);
+  });
+
+  it("numbers the first fret of a shape up the neck, and draws no nut there", () => {
+    const { container } = render(<ChordGrid name="D" shape={shape([5, 4, 3], [3, 2, 1], [0])} strings={3} />);
+    expect([...container.querySelectorAll("text")].map((text) => text.textContent)).toContain("3");
+    expect(container.querySelector('line[stroke-width="3"]')).toBeNull();
+  });
+});

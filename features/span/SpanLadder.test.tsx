@@ -18,7 +18,7 @@ describe("SpanLadder", () => {
 
   it("shows zones by form: solid, hatched, dotted with a triangle", () => {
     const { container } = render(<SpanLadder voice={voice} marks={marks} step={18} width={358} />);
-    const bars = [...container.querySelectorAll('rect[x="116"],rect[x="116.75"]')];
+    const bars = Array.from(container.querySelectorAll('rect[x="116"],rect[x="116.75"]'));
     expect(bars.map((bar) => [bar.getAttribute("fill")?.replace(/#\w+/, "#"), bar.getAttribute("stroke")])).toEqual([
       ["var(--ink)", null],
       ["url(#)", "var(--honey)"],
@@ -106,6 +106,6 @@ describe("KeySpan", () => {
 
   it("names both ends, and marks the one beyond with a triangle", () => {
     const { container } = render(<KeySpan voice={voice} marks={marks} scale={{ low: 48, high: 78 }} spelling="flats" />);
-    expect([...container.querySelectorAll("text")].map((text) => text.textContent)).toEqual(["C4", "D5 ▲"]);
+    expect(Array.from(container.querySelectorAll("text")).map((text) => text.textContent)).toEqual(["C4", "D5 ▲"]);
   });
 });

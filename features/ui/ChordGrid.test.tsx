@@ -41,10 +41,10 @@ describe("ChordGrid", () => {
 
   it("fills roots plum, rings open strings and strokes silent ones", () => {
     const { container } = render(<ChordGrid name="D" shape={shape([null, 0, 2], [0, 0, 1], [1, 2])} strings={3} />);
-    const rings = [...container.querySelectorAll("circle")].filter((circle) => circle.getAttribute("fill") === "none");
+    const rings = Array.from(container.querySelectorAll("circle")).filter((circle) => circle.getAttribute("fill") === "none");
     expect(rings).toHaveLength(1);
     expect(rings[0]?.getAttribute("stroke")).toBe("var(--plum)");
-    const dots = [...container.querySelectorAll("circle")].filter((circle) => circle.getAttribute("fill") === "var(--plum)");
+    const dots = Array.from(container.querySelectorAll("circle")).filter((circle) => circle.getAttribute("fill") === "var(--plum)");
     expect(dots).toHaveLength(1);
     expect(container.querySelectorAll('line[y1="7"]')).toHaveLength(1);
   });
@@ -57,7 +57,7 @@ describe("ChordGrid", () => {
 
   it("numbers the first fret of a shape up the neck, and draws no nut there", () => {
     const { container } = render(<ChordGrid name="D" shape={shape([5, 4, 3], [3, 2, 1], [0])} strings={3} />);
-    expect([...container.querySelectorAll("text")].map((text) => text.textContent)).toContain("3");
+    expect(Array.from(container.querySelectorAll("text")).map((text) => text.textContent)).toContain("3");
     expect(container.querySelector('line[stroke-width="3"]')).toBeNull();
   });
 });

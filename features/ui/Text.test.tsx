@@ -28,7 +28,7 @@ describe("Text", () => {
     render(<Text testID="line">Capo 1, shapes of B♭ and F♯m</Text>);
     const line = screen.getByTestId("line");
     expect(line.textContent).toBe("Capo 1, shapes of B♭ and F♯m");
-    const signs = [...line.querySelectorAll("span.mu")].map((sign) => sign.textContent);
+    const signs = Array.from(line.querySelectorAll("span.mu")).map((sign) => sign.textContent);
     expect(signs).toEqual(["♭", "♯"]);
     expect(themeCss).toContain(`span.mu{display:inline-block;font-family:${fonts.music}`);
   });
@@ -48,7 +48,7 @@ describe("Text", () => {
         </SvgLabel>
       </svg>,
     );
-    const sign = [...container.querySelectorAll("tspan")].find((part) => part.textContent === "♯");
+    const sign = Array.from(container.querySelectorAll("tspan")).find((part) => part.textContent === "♯");
     expect(sign?.style.fontFamily).toContain("Noto Music");
   });
 

@@ -48,7 +48,7 @@ const tabulature = /^\s*[A-Ga-g][#b]?\s*[|:][-\d|:hpbrstx()/\\~^<>* ]{0,400}--/;
  * @returns its sections, and the signs on chord lines that could not be read
  */
 export function parseChart(text: string): Chart {
-  const rows = text.replace(/\r\n?/g, "\n").split("\n");
+  const rows = text.replace(/\r\n?/g, "\n").split("\n").map(readRow);
   const sections: ChartSection[] = [];
   const open = (label: string | null, heading: string | null): ChartSection => {
     const section = { label, heading, lines: [] };
@@ -56,7 +56,7 @@ export function parseChart(text: string): Chart {
     return section;
   };
   for (let index = 0; index < rows.length; index += 1) {
-    const row = readRow(rows[index]!);
+    const row = rows[index]!;
     if (row.kind === "heading") {
       open(row.label, row.text);
       continue;
@@ -68,7 +68,7 @@ export function parseChart(text: string): Chart {
       continue;
     }
     const { written, chords } = row;
-    const below = index + 1 < rows.length ? readRow(rows[index + 1]!) : null;
+    const below = rows[index + 1];
     if (below?.kind === "lyrics") {
       section.lines.push({ kind: "sung", written, chords, lyrics: below.lyrics });
       index += 1;

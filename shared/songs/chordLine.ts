@@ -20,7 +20,7 @@ const repeat =
 const beat = /^(?:[/\\.,…~*·•↑↓>]+|[-–—=]+>?)$/;
 const noChord = /^[([]?(?:N\.C\.?|NC\.?|n\.c\.?)[)\]]?[*,]?$/;
 /** An unreadable sign that still looks meant as a chord: a note letter, then more than small letters. */
-const chordish = /^[([]?[A-H](?:[#b♯♭]|$|[^a-z\s]|(?:m|maj|min|dim|aug|sus|add)(?![a-z]))/;
+const chordish = /^[([]?[A-H](?:[#b♯♭]|$|[^a-z\s]|[a-z]{1,4}\d|(?:m|maj|min|dim|aug|sus|add)(?![a-z]))/;
 
 /**
  * Reads a line as chords, deciding by all that it holds.

@@ -65,19 +65,19 @@ export function Screen({ title, subtitle, crumb, back, closes = false, hideBar =
   return (
     <View style={{ flexGrow: 1 }}>
       <PhoneTop {...head} />
-      <View role="main" nativeID="main" {...webProps({ tabIndex: -1 })} style={[{ flexGrow: 1, paddingHorizontal: sizes.gutterPhone, paddingBottom: foot ? 8 : 24 }, webStyle({ outlineStyle: "none" })]}>
-        {children}
+      <View role="main" nativeID="main" {...webProps({ tabIndex: -1 })} style={[{ flexGrow: 1 }, webStyle({ outlineStyle: "none" })]}>
+        <View style={{ flexGrow: 1, paddingHorizontal: sizes.gutterPhone, paddingBottom: foot ? 8 : 24 }}>{children}</View>
+        {foot !== undefined && foot !== null && (
+          <View
+            style={[
+              { gap: 10, paddingHorizontal: sizes.gutterPhone, paddingTop: 8, paddingBottom: 14, backgroundColor: colors.paper, zIndex: 1 },
+              webStyle({ position: "sticky", bottom: barHidden ? 0 : `calc(${sizes.bar}px + env(safe-area-inset-bottom))` }),
+            ]}
+          >
+            {foot}
+          </View>
+        )}
       </View>
-      {foot !== undefined && foot !== null && (
-        <View
-          style={[
-            { gap: 10, paddingHorizontal: sizes.gutterPhone, paddingTop: 8, paddingBottom: 14, backgroundColor: colors.paper, zIndex: 1 },
-            webStyle({ position: "sticky", bottom: barHidden ? 0 : `calc(${sizes.bar}px + env(safe-area-inset-bottom))` }),
-          ]}
-        >
-          {foot}
-        </View>
-      )}
     </View>
   );
 }

@@ -47,7 +47,14 @@ function between(power: Float32Array, count: number, every: number, least: numbe
   return weight >= 1 ? sum / weight : 1;
 }
 
-function powerAt(r: Float32Array, hz: number): number {
+/**
+ * Power of the sound near one frequency, from its autocorrelation (resolution about 57 Hz).
+ *
+ * @param r autocorrelation, shape [141]
+ * @param hz frequency, 0 to 2300 Hz
+ * @returns power in arbitrary units, comparable within one frame
+ */
+export function powerAt(r: Float32Array, hz: number): number {
   const step = 2 * Math.cos((2 * Math.PI * hz) / ANALYSIS_RATE);
   let before = step / 2;
   let now = 1;

@@ -55,7 +55,7 @@ export function createLiveTracker(sampleRate: number): { push(pcm: Float32Array)
     if (!point) return null;
     const [oldest, ...rest] = waiting;
     waiting = rest;
-    const { hz, clarity, levelDb } = trackFrame(oldest!, point.candidate?.hz ?? null, point.candidate?.clarity);
+    const { hz, clarity, levelDb } = trackFrame(oldest!, point.candidate);
     return { t: decided++ / 100, hz, clarity, levelDb };
   }
 

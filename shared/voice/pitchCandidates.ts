@@ -12,6 +12,10 @@ const LEAST_CLARITY = 0.2;
 const CLEAR_ENOUGH = 0.8;
 /** whose peaks are worth a little less, being found among fewer samples. */
 const SHORT_DISCOUNT = 0.96;
+/** A candidate with at least this presence of its harmonics explains a sound as one voice. */
+const WHOLE = 0.4;
+/** Candidates above the search limit are kept for the path to choose, so that a whistle does not pass for its octave below. */
+const DECOY_HZ = 2000;
 
 /** One possible pitch of a frame. */
 export interface PitchCandidate {
@@ -30,6 +34,8 @@ export interface CandidateFrame {
   levelDb: number;
   /** power of the frame over the room's, in dB; 60 where the room is silent */
   aboveRoomDb: number;
+  /** the clearest period is only a common one of several sounds, and no candidate explains the frame nearly as well */
+  mixed: boolean;
 }
 
 /**
@@ -38,14 +44,14 @@ export interface CandidateFrame {
  * @param frame lag-domain picture of the frame
  * @param room what the room alone sounds like, subtracted first
  * @param short measures the same frame through the short window; asked for only where the long one is unclear
- * @returns up to 8 candidates between 60 and 1400 Hz, shortest period first
+ * @returns up to 8 candidates between 60 and 2000 Hz (above 1400 Hz only as decoys), shortest period first
  * @see P. McLeod, G. Wyvill, ICMC 2005; S. Boll, IEEE Trans. ASSP 27(2) 1979 (subtraction of mean noise power)
  */
 export function findCandidates(frame: LagFrame, room: RoomFloor, short: () => LagFrame): CandidateFrame {
   const power = frame.m[0]!;
   const roomPower = room.m[0]!;
   const aboveRoomDb = power <= 0 ? -60 : roomPower <= 0 ? 60 : Math.max(-60, Math.min(60, 10 * Math.log10(power / roomPower)));
-  const out: CandidateFrame = { candidates: [], levelDb: frame.levelDb, aboveRoomDb };
+  const out: CandidateFrame = { candidates: [], levelDb: frame.levelDb, aboveRoomDb, mixed: false };
   if (power <= 0) return out;
   const long = peaks(cleanedDifference(frame, room, WINDOW));
   const clearest = long.reduce((top, c) => Math.max(top, c.clarity), 0);
@@ -53,6 +59,9 @@ export function findCandidates(frame: LagFrame, room: RoomFloor, short: () => La
   const candidates = clearest < CLEAR_ENOUGH && loudEnough ? joined(long, peaks(cleanedDifference(short(), room, SHORT_WINDOW))) : long;
   const r = frame.r.map((x, lag) => x - room.r[lag]!);
   out.candidates = candidates.map((c) => (hasShorter(c, candidates) ? { ...c, presence: harmonicPresence(r, c.hz) } : c));
+  const whole = out.candidates.filter((c) => c.presence >= WHOLE).reduce((top, c) => Math.max(top, c.clarity), 0);
+  const any = out.candidates.reduce((top, c) => Math.max(top, c.clarity), 0);
+  out.mixed = any > 0.6 && whole < any - 0.12;
   return out;
 }
 
@@ -71,13 +80,13 @@ function joined(long: PitchCandidate[], short: PitchCandidate[]): PitchCandidate
 
 function peaks(n: Float32Array): PitchCandidate[] {
   const found: PitchCandidate[] = [];
-  const shortest = Math.floor(ANALYSIS_RATE / HIGHEST_HZ);
+  const shortest = Math.floor(ANALYSIS_RATE / DECOY_HZ);
   for (let lag = shortest; lag < MAX_LAG - 4; lag++) {
     const here = n[lag]!;
     if (here < LEAST_CLARITY - 0.1 || here < n[lag - 1]! || here <= n[lag + 1]!) continue;
     const [period, clarity] = refine(n, lag);
     const hz = ANALYSIS_RATE / period;
-    if (clarity < LEAST_CLARITY || hz < LOWEST_HZ || hz > HIGHEST_HZ) continue;
+    if (clarity < LEAST_CLARITY || hz < LOWEST_HZ || hz > DECOY_HZ) continue;
     found.push({ hz, midi: 69 + 12 * Math.log2(hz / 440), clarity: Math.min(1, clarity), presence: 1 });
   }
   if (found.length <= MOST_CANDIDATES) return found;

@@ -13,8 +13,8 @@ const COST = {
   voicing: 0.35,
   unvoiced: 0.66,
   absent: 0.35,
-  presentFrom: 0.35,
-  perOctaveDown: 0.06,
+  presentFrom: 0.45,
+  perOctaveDown: 0.08,
   soft: 0.8,
 };
 

@@ -1,8 +1,11 @@
 import { createLagMeter, HOP, SHORT_WINDOW, WINDOW } from "../signal/lagFrame";
 import { createResampler } from "../signal/resampler";
-import { findCandidates, type CandidateFrame } from "./pitchCandidates";
+import { powerAt } from "./harmonicPresence";
+import { findCandidates, HIGHEST_HZ, type CandidateFrame, type PitchCandidate } from "./pitchCandidates";
 import { createPathFinder } from "./pitchPath";
 import { measureRoom, type RoomFloor } from "./roomFloor";
+
+const OVERTONE_FROM_MIDI = 76;
 
 /** What the tracker decided for one frame of 10 ms. */
 export interface TrackFrame {
@@ -12,6 +15,10 @@ export interface TrackFrame {
   clarity: number;
   levelDb: number;
   aboveRoomDb: number;
+  /** several sounds at once: only a common period was found */
+  mixed: boolean;
+  /** second harmonic against the first in dB, for pitches from E5 up; null elsewhere */
+  overtoneDb: number | null;
 }
 
 /** A whole take, tracked. */
@@ -41,14 +48,25 @@ export function trackPitch(pcm: Float32Array, sampleRate: number): PitchTrack {
     found.push(frame);
     finder.push(frame);
   });
-  const frames = finder.path().map((point, k) => trackFrame(found[k]!, point.candidate?.hz ?? null, point.candidate?.clarity));
+  const frames = finder.path().map((point, k) => ({
+    ...trackFrame(found[k]!, point.candidate),
+    overtoneDb: point.candidate && point.candidate.midi > OVERTONE_FROM_MIDI ? overtone(lagFrames[k]!.r, point.candidate.hz) : null,
+  }));
   return { frames, room };
 }
 
-/** Puts the decision and the frame it was made on together. */
-export function trackFrame(frame: CandidateFrame, hz: number | null, clarity?: number): TrackFrame {
-  const best = clarity ?? frame.candidates.reduce((top, c) => Math.max(top, c.clarity), 0);
-  return { hz, clarity: Math.max(0, Math.min(1, best)), levelDb: frame.levelDb, aboveRoomDb: frame.aboveRoomDb };
+/** Puts the decision and the frame it was made on together; a decision above the search limit counts as no voice. */
+export function trackFrame(frame: CandidateFrame, decided: PitchCandidate | null): TrackFrame {
+  const { levelDb, aboveRoomDb, mixed } = frame;
+  const best = decided?.clarity ?? frame.candidates.reduce((top, c) => Math.max(top, c.clarity), 0);
+  const hz = decided && decided.hz <= HIGHEST_HZ ? decided.hz : null;
+  return { hz, clarity: Math.max(0, Math.min(1, best)), levelDb, aboveRoomDb, mixed, overtoneDb: null };
+}
+
+function overtone(r: Float32Array, hz: number): number {
+  const first = powerAt(r, hz);
+  const second = powerAt(r, Math.min(2 * hz, 2300));
+  return first > 0 ? 10 * Math.log10(Math.max(1e-6, second / first)) : 0;
 }
 
 function atAnalysisRate(pcm: Float32Array, sampleRate: number): Float32Array {

@@ -1,5 +1,6 @@
 import type { RoomFloor } from "./roomFloor";
 import type { TrackFrame } from "./pitchTrack";
+import { findSigns } from "./singingSigns";
 import type { HeardNote } from "./sungNotes";
 import type { Verdict } from "./takeReport";
 
@@ -7,6 +8,11 @@ import type { Verdict } from "./takeReport";
 export const LEAST_HELD_S = 1.2;
 const LEAST_HELD_IN_HOLD_S = 0.5;
 const QUIET_DB = -60;
+const FAINT_DB = -42;
+const MIXED_AT_MOST = 0.35;
+const VOICED_AT_LEAST = 0.4;
+const SPEECH_FROM = 1.3;
+const CLIPPED_BEYOND_USE = 0.05;
 
 /** Everything a verdict is made from. */
 export interface Evidence {
@@ -26,17 +32,29 @@ export interface Evidence {
  * @returns "heard" or the reason for saying nothing
  */
 export function judgeTake(evidence: Evidence): Verdict {
-  const { notes, frames, hold } = evidence;
-  const clear = notes.filter((n) => n.clear);
-  const heldS = clear.reduce((sum, n) => sum + n.heldS, 0);
+  const { notes, frames, hold, durationS, room } = evidence;
   const loudest = frames.reduce((top, f) => Math.max(top, f.levelDb), -Infinity);
   if (loudest < QUIET_DB) return "too-quiet";
-  if (heldS >= (hold ? LEAST_HELD_IN_HOLD_S : LEAST_HELD_S)) return "heard";
-  if (evidence.clipped > 0.05) return "clipped";
-  const voicedS = frames.filter((f) => f.hz !== null).length / 100;
-  if (evidence.durationS < 2 || (heldS > 0 && voicedS < 1.5)) return "too-short";
-  if (evidence.room.levelDb !== null && loudest - evidence.room.levelDb < 10) return "too-noisy";
-  return "not-singing";
+  const signs = findSigns(frames, notes);
+  const enough = signs.heldS >= (hold ? LEAST_HELD_IN_HOLD_S : LEAST_HELD_S);
+  if (enough && !signs.plucked && !signs.whistled) {
+    if (signs.mixedShare > MIXED_AT_MOST) return "several-voices";
+    if (signs.voicedShare >= VOICED_AT_LEAST && (hold || signs.speechLikeness < SPEECH_FROM)) return "heard";
+  }
+  if (signs.plucked || signs.whistled) return "not-singing";
+  if (evidence.clipped > CLIPPED_BEYOND_USE) return "clipped";
+  if (durationS < 2 || (!enough && signs.heldS > 0 && signs.voicedShare >= VOICED_AT_LEAST && signs.speechLikeness < SPEECH_FROM)) return "too-short";
+  if (room.levelDb === null && loudest < FAINT_DB) return "too-quiet";
+  if (isNoise(frames, room)) return "too-noisy";
+  return signs.mixedShare > MIXED_AT_MOST ? "several-voices" : "not-singing";
+}
+
+/** Loud all through, without pauses and without any pitch: whatever voice there is, the room covers it. */
+function isNoise(frames: readonly TrackFrame[], room: RoomFloor): boolean {
+  const levels = frames.map((f) => f.levelDb).sort((a, b) => a - b);
+  const spread = (levels[Math.floor(levels.length * 0.95)] ?? 0) - (levels[Math.floor(levels.length * 0.1)] ?? 0);
+  const loudest = levels[levels.length - 1] ?? -Infinity;
+  return spread < 10 || (room.levelDb !== null && loudest - room.levelDb < 10);
 }
 
 const SENTENCES: Record<Exclude<Verdict, "heard">, [string, string]> = {
@@ -45,7 +63,7 @@ const SENTENCES: Record<Exclude<Verdict, "heard">, [string, string]> = {
   "too-noisy": ["The room was too loud to hear your voice apart from it.", "Find a quieter place or come closer to the microphone, and sing again."],
   clipped: ["The sound was too loud for the microphone.", "Step back a little or turn the microphone down, and sing again."],
   "not-singing": ["No singing was found in this recording.", "Sing a line you know well on your own, without an instrument."],
-  "several-voices": ["More than one voice was heard.", "Sing alone for this one, so that the range is yours."],
+  "several-voices": ["More than one voice or instrument was heard at once.", "Sing alone and without an instrument for this one, so that the range is yours."],
 };
 
 /** @returns the sentence and the next step for a take that was not heard */

@@ -1,0 +1,53 @@
+import { mkdtempSync, rmSync } from "node:fs";
+import { tmpdir } from "node:os";
+import { join } from "node:path";
+import { renderChoir } from "../sound/choir";
+import { singPhrase } from "../sound/singer";
+import { writeWav } from "../sound/wavFile";
+
+/** Chromium's fake microphone loses what comes before the page listens and repeats the last moment for ever. */
+const padS = 1;
+
+/** The tune that the journeys sing, as steps above its lowest note: up, around and down again, with held ends. */
+const tune = [0, 4, 7, 9, 12, 14, 12, 9, 7, 5, 4, 2, 0].map((step) => ({ step, durationS: step === 0 || step === 14 ? 0.9 : 0.55 }));
+
+/** A folder of wav files for one test file's browsers; `remove` takes it away. */
+export function makeMicrophones() {
+  const folder = mkdtempSync(join(tmpdir(), "microphone-"));
+  const keep = (name: string, pcm: Float32Array, sampleRate: number) => {
+    const wav = join(folder, `${name}.wav`);
+    writeWav(wav, pcm, sampleRate);
+    return wav;
+  };
+  return {
+    /** A source-filter voice singing the tune from the given lowest note. */
+    voice(lowestMidi: number) {
+      const notes = tune.map(({ step, durationS }) => ({ midi: lowestMidi + step, durationS }));
+      const { pcm, truth, sampleRate } = singPhrase({
+        notes,
+        seed: 7,
+        sampleRate: 48_000,
+        padS,
+        vibrato: { rateHz: 5.6, extentCents: 35 },
+        tract: lowestMidi < 55 ? 1 : 1.15,
+      });
+      return { wav: keep(`voice-${lowestMidi}`, pcm, sampleRate), lowestMidi: truth.lowestMidi, highestMidi: truth.highestMidi };
+    },
+    /** Debian's sampled choir singing the same; null where FluidSynth or its sound font is not installed. */
+    choir(lowestMidi: number) {
+      const rendered = renderChoir(
+        tune.map(({ step, durationS }) => ({ midi: lowestMidi + step, durationS })),
+        { sampleRate: 48_000, padS },
+      );
+      if (!rendered) return null;
+      const padded = new Float32Array(rendered.pcm.length + padS * rendered.sampleRate);
+      padded.set(rendered.pcm);
+      return { wav: keep("choir", padded, rendered.sampleRate), lowestMidi, highestMidi: lowestMidi + 14 };
+    },
+    /** Ten seconds of a switched-off room. */
+    silence() {
+      return keep("silence", new Float32Array(10 * 48_000), 48_000);
+    },
+    remove: () => rmSync(folder, { recursive: true, force: true }),
+  };
+}

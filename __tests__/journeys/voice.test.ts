@@ -1,0 +1,121 @@
+import type { Browser, Page } from "playwright-core";
+import { glyphs, noteName } from "../../shared/music/pitch";
+import { launchBrowser, openProfile, type Microphone, type Viewport } from "./browser";
+import { makeMicrophones } from "./microphone";
+import { startProduct, type Product } from "./product";
+
+const microphones = makeMicrophones();
+let product: Product;
+let browser: Browser | undefined;
+
+beforeAll(async () => {
+  product = await startProduct();
+}, 60_000);
+afterEach(async () => {
+  await browser?.close();
+  browser = undefined;
+});
+afterAll(async () => {
+  microphones.remove();
+  await product.stop();
+});
+
+async function open(microphone: Microphone, viewport: Viewport = "phone") {
+  browser = await launchBrowser(microphone);
+  return openProfile(browser, product.address, viewport);
+}
+
+/** From home to the result, as a stranger would. */
+async function singUntilHeard(page: Page): Promise<void> {
+  await page.goto("/");
+  await page.getByRole("link", { name: "Sing a few seconds" }).click();
+  await page.getByTestId("sing-start").click();
+  // the tune lasts eight seconds behind one second of silence
+  await page.waitForFunction(() => Number.parseInt(document.querySelector('[data-testid="take-seconds"]')?.textContent ?? "0", 10) >= 9);
+  await page.getByTestId("sing-stop").click();
+}
+
+/** What the span ladder says to those who cannot see it. */
+async function ladderWords(page: Page): Promise<string | null> {
+  return page.getByRole("img", { name: /^Voice (heard|set) from/ }).getAttribute("aria-label");
+}
+
+const heardFrom = (lowestMidi: number, highestMidi: number) =>
+  `Voice heard from ${glyphs(noteName(lowestMidi))} to ${glyphs(noteName(highestMidi))}.`;
+
+describe("a sung phrase", () => {
+  test.each([
+    ["phone", 45],
+    ["wide", 57],
+  ] as const)("gives its true lowest and highest notes on the %s", async (viewport, lowest) => {
+    const voice = microphones.voice(lowest);
+    const { page, errors } = await open({ wav: voice.wav }, viewport);
+    await singUntilHeard(page);
+    expect(await ladderWords(page)).toContain(heardFrom(voice.lowestMidi, voice.highestMidi));
+    expect(await page.getByTestId("take-clear").textContent()).toMatch(/^Heard clearly in \d+ of \d+ notes$/);
+    expect(errors).toEqual([]);
+  });
+
+  test("by Debian's sampled choir gives its true lowest and highest notes", async () => {
+    const choir = microphones.choir(60);
+    if (!choir) throw new Error("FluidSynth or its sound font is missing: apt-get install fluidsynth fluid-soundfont-gm");
+    const { page } = await open({ wav: choir.wav });
+    await singUntilHeard(page);
+    expect(await ladderWords(page)).toContain(heardFrom(choir.lowestMidi, choir.highestMidi));
+  });
+
+  test("is drawn while it is sung, can be played back, sung again, and survives a reload before it is kept", async () => {
+    const voice = microphones.voice(57);
+    const { page } = await open({ wav: voice.wav });
+    await page.goto("/voice/sing");
+    await page.getByTestId("sing-start").click();
+    await page.getByTestId("pitch-trail").waitFor();
+    await page.waitForFunction(() => /^[A-G]/.test(document.querySelector('[data-testid="note-now"]')?.textContent ?? ""));
+    await page.waitForFunction(() => Number.parseInt(document.querySelector('[data-testid="take-seconds"]')?.textContent ?? "0", 10) >= 9);
+    await page.getByTestId("sing-stop").click();
+    const summary = await ladderWords(page);
+    await page.getByTestId("take-play").click();
+    await page.getByRole("button", { name: "Stop playing" }).waitFor();
+    await page.reload();
+    expect(await ladderWords(page)).toBe(summary);
+    await page.getByTestId("sing-again").click();
+    await page.getByRole("button", { name: /Start singing|Stop/ }).waitFor();
+  });
+});
+
+describe("when it cannot be heard", () => {
+  test("a refused microphone is said so, and the notes can be set by hand", async () => {
+    const { page } = await open("refused");
+    await page.goto("/voice/sing");
+    await page.getByTestId("sing-start").click();
+    await page.getByTestId("take-failure-refused").waitFor();
+    await page.getByTestId("sing-by-hand").click();
+    await page.getByTestId("by-hand-lowest").fill("A2");
+    await page.getByTestId("by-hand-highest").fill("H9");
+    await page.getByTestId("by-hand-keep").click();
+    await page.locator('[data-testid="by-hand-highest"][aria-invalid="true"]').waitFor();
+    expect(await page.getByTestId("by-hand-lowest").inputValue()).toBe("A2");
+    expect(await page.getByTestId("by-hand-highest").inputValue()).toBe("H9");
+    await page.getByTestId("by-hand-highest").fill("E4");
+    await page.getByTestId("by-hand-keep").click();
+    await page.waitForURL("**/voice");
+    expect(await ladderWords(page)).toContain("A2 to E4");
+  });
+
+  test("a missing microphone is said so", async () => {
+    const { page } = await open("none");
+    await page.goto("/voice/sing");
+    await page.getByTestId("sing-start").click();
+    await page.getByTestId("take-failure-no-microphone").waitFor();
+  });
+
+  test("silence is refused with the reason", async () => {
+    const { page } = await open({ wav: microphones.silence() });
+    await page.goto("/voice/sing");
+    await page.getByTestId("sing-start").click();
+    await page.waitForFunction(() => Number.parseInt(document.querySelector('[data-testid="take-seconds"]')?.textContent ?? "0", 10) >= 4);
+    await page.getByTestId("sing-stop").click();
+    await page.getByTestId("take-failure-too-quiet").waitFor();
+    await page.getByTestId("sing-again").waitFor();
+  });
+});

@@ -25,6 +25,7 @@ beforeAll(async () => {
   write(entry, script, true);
   write("worklets/listen.js", "registerProcessor()");
   write("assets/fonts/music.0123456789abcdef0123456789abcdef.woff2", "font");
+  write("assets/close.0123456789abcdef0123456789abcdef@2x.png", "image");
   write(".secret", "hidden");
   writeFileSync(`${directory}-beside`, "outside");
   server = await startTestServer({ staticDir: directory });
@@ -99,6 +100,9 @@ it.each([
 it("lets only files whose name changes with their content be kept for ever", async () => {
   expect(
     (await get("/assets/fonts/music.0123456789abcdef0123456789abcdef.woff2").expect(200)).headers["cache-control"],
+  ).toMatch(/immutable/);
+  expect(
+    (await get("/assets/close.0123456789abcdef0123456789abcdef@2x.png").expect(200)).headers["cache-control"],
   ).toMatch(/immutable/);
   expect((await get("/worklets/listen.js").expect(200)).headers["cache-control"]).toBe("no-cache");
 });

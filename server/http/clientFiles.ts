@@ -4,7 +4,7 @@ import express, { type Request, type RequestHandler, type Response } from "expre
 import { isClientRoute } from "./clientRoutes";
 
 /** A name that changes with its content may be kept for ever. */
-const hashed = /[-.][0-9a-f]{16,64}(\.[a-z0-9]+)+$/;
+const hashed = /[-.][0-9a-f]{16,64}(@\dx)?(\.[a-z0-9]+)+$/;
 const encodings = [
   { name: "br", ending: ".br" },
   { name: "gzip", ending: ".gz" },

@@ -5,6 +5,8 @@ const MOST_HARMONICS = 12;
 const HIGHEST_HARMONIC_HZ = 2300;
 /** Harmonics whose surroundings hold less than this share of the power tell nothing. */
 const LEAST_SHARE = 3e-4;
+/** With fewer harmonics than this to look at, what is missing proves less. */
+const SURE_FROM = 3;
 
 const lagWindow = Float32Array.from({ length: MAX_LAG + 1 }, (_, lag) => (lag === 0 ? 0.5 : 0.5 + 0.5 * Math.cos((Math.PI * lag) / MAX_LAG)));
 
@@ -44,7 +46,9 @@ function between(power: Float32Array, count: number, every: number, least: numbe
     sum += trust * Math.min(1, Math.sqrt(power[h]! / Math.max(expected, 1e-30)));
     weight += trust;
   }
-  return weight >= 1 ? sum / weight : 1;
+  if (weight < 1) return 1;
+  const sure = Math.min(1, weight / SURE_FROM);
+  return 1 - sure * (1 - sum / weight);
 }
 
 /**

@@ -12,8 +12,8 @@ const COST = {
   mostForAJump: 0.9,
   voicing: 0.35,
   unvoiced: 0.66,
-  absent: 0.35,
-  presentFrom: 0.45,
+  absent: 0.4,
+  presentFrom: 0.6,
   perOctaveDown: 0.08,
   soft: 0.8,
 };

@@ -5,6 +5,7 @@ import type { WrittenFile, WrittenVoice } from "./melodyVoice";
 /** The parts of a parsed tune that are read here. */
 interface AbcElement {
   el_type: string;
+  type?: string;
   startChar?: number;
   decoration?: unknown;
   gracenotes?: unknown;
@@ -71,6 +72,9 @@ function readTune(tune: AbcTune, several: boolean): WrittenVoice[] {
   for (const line of tune.lines) {
     for (const staff of line.staff ?? []) {
       staff.voices = (staff.voices ?? []).map((voice) => voice.filter((element) => element.el_type !== "tempo"));
+      // Unrolling loses a last note that no bar line follows.
+      if (line === tune.lines.at(-1))
+        for (const voice of staff.voices) voice.push({ el_type: "bar", type: "bar_thin" });
       for (const element of staff.voices.flat()) {
         delete element.gracenotes;
         delete element.decoration;

@@ -1,5 +1,5 @@
 import { Midi } from "@tonejs/midi";
-import { parseKeyName } from "../music/keyName";
+import { keyFifths, keyOfFifths, type KeyName, parseKeyName } from "../music/keyName";
 import { scanMidi } from "./midiScan";
 import type { WrittenFile, WrittenVoice } from "./melodyVoice";
 
@@ -17,9 +17,7 @@ export function readMidi(bytes: Uint8Array): WrittenFile {
     const file = new Midi(bytes);
     const { ppq } = file.header;
     const stated = file.header.keySignatures[0];
-    const named = stated ? parseKeyName(`${stated.key} ${stated.scale}`) : null;
-    // C major is what programs write when nobody set the key: it says nothing.
-    const key = named?.tonic === "C" && named.mode === "major" ? null : named;
+    const key = stated ? statedKey(stated.key, stated.scale) : null;
     const tracks = file.tracks.filter((track) => track.notes.length > 0);
     const words = file.header.meta.filter((event) => event.type === "lyrics");
     const voices = tracks.map((track, index): WrittenVoice => {
@@ -47,6 +45,13 @@ export function readMidi(bytes: Uint8Array): WrittenFile {
   } catch {
     return { ok: false, reason: "This MIDI file cannot be read; it is damaged." };
   }
+}
+
+/** The reader names the signature by its major key in minor keys too. C major is what stands where nobody set a key. */
+function statedKey(major: string | undefined, scale: string): KeyName | null {
+  const signature = major === undefined ? null : parseKeyName(major);
+  if (!signature || (signature.tonic === "C" && scale === "major")) return null;
+  return keyOfFifths(keyFifths(signature), scale === "minor" ? "minor" : "major");
 }
 
 /** Words of the file belong to the track whose notes start with them. */

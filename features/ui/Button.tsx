@@ -1,5 +1,6 @@
 import { Pressable, type StyleProp, type View, type ViewStyle } from "react-native";
 import { ButtonFace, buttonBox, type ButtonLook } from "./ButtonFace";
+import { useLayout } from "./useLayout";
 import { webProps } from "./webStyle";
 
 export interface ButtonProps extends ButtonLook {
@@ -18,6 +19,7 @@ export interface ButtonProps extends ButtonLook {
 const asSubmit = (node: View | null) => void (node as unknown as HTMLElement | null)?.setAttribute("type", "submit");
 
 export function Button({ onPress, accessibleName, submit, expanded, testID, style, ...look }: ButtonProps) {
+  const layout = useLayout();
   const off = look.disabled === true || look.busy === true;
   return (
     <Pressable
@@ -28,7 +30,7 @@ export function Button({ onPress, accessibleName, submit, expanded, testID, styl
       testID={testID}
       aria-label={accessibleName}
       {...webProps({ "aria-busy": look.busy || undefined, "aria-expanded": expanded })}
-      style={[buttonBox(look), style]}
+      style={[buttonBox(look, layout), style]}
     >
       <ButtonFace {...look} />
     </Pressable>

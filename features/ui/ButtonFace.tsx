@@ -2,6 +2,7 @@ import { ActivityIndicator, View, type ViewStyle } from "react-native";
 import { Icon, type IconName } from "./Icon";
 import { Text } from "./Text";
 import { colors, sizes } from "./theme";
+import type { Layout } from "./useLayout";
 
 export type ButtonKind = "primary" | "secondary" | "text";
 
@@ -15,16 +16,17 @@ export interface ButtonLook {
   small?: boolean;
 }
 
-/** The box of a button or of a link that looks like one. */
-export function buttonBox({ kind = "primary", small, disabled }: Omit<ButtonLook, "label">): ViewStyle {
+/** The box of a button or of a link that looks like one: 56 high with corners of 14 on the phone, a pill of 48 on wider screens. */
+export function buttonBox({ kind = "primary", small, disabled }: Omit<ButtonLook, "label">, layout: Layout): ViewStyle {
   const text = kind === "text";
+  const phone = layout === "phone";
   return {
     flexDirection: "row",
     alignItems: "center",
     justifyContent: "center",
-    minHeight: text || small ? sizes.target : 56,
+    minHeight: text || small || !phone ? sizes.target : 56,
     minWidth: sizes.target,
-    borderRadius: sizes.radius,
+    borderRadius: phone ? sizes.radius : 999,
     paddingHorizontal: text ? 8 : 20,
     paddingVertical: 8,
     backgroundColor: kind === "primary" ? (disabled ? colors.line : colors.plum) : "transparent",

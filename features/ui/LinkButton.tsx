@@ -1,6 +1,7 @@
 import { Link, type Href } from "expo-router";
 import type { StyleProp, TextStyle } from "react-native";
 import { ButtonFace, buttonBox, type ButtonLook } from "./ButtonFace";
+import { useLayout } from "./useLayout";
 import { webProps, webStyle } from "./webStyle";
 
 export interface LinkButtonProps extends Omit<ButtonLook, "busy" | "disabled"> {
@@ -13,6 +14,7 @@ export interface LinkButtonProps extends Omit<ButtonLook, "busy" | "disabled"> {
 
 /** A link that looks like a button: it leads to another page. */
 export function LinkButton({ href, accessibleName, replace = false, testID, style, ...look }: LinkButtonProps) {
+  const layout = useLayout();
   return (
     <Link
       href={href}
@@ -20,7 +22,7 @@ export function LinkButton({ href, accessibleName, replace = false, testID, styl
       testID={testID}
       aria-label={accessibleName}
       {...webProps({ "data-button": "" })}
-      style={[buttonBox(look) as TextStyle, webStyle({ display: "flex" }), style]}
+      style={[buttonBox(look, layout) as TextStyle, webStyle({ display: "flex" }), style]}
     >
       <ButtonFace {...look} />
     </Link>

@@ -22,8 +22,14 @@ function mayReload(now: number): boolean {
   }
 }
 
+export interface MissingChunkBoundaryProps {
+  /** address of the page; another one gets a fresh try */
+  path: string;
+  children: ReactNode;
+}
+
 /** Catches what breaks below it. A part that is missing after a new version is fetched by one reload. */
-export class MissingChunkBoundary extends Component<{ children: ReactNode }, { error: Error | null }> {
+export class MissingChunkBoundary extends Component<MissingChunkBoundaryProps, { error: Error | null }> {
   override state: { error: Error | null } = { error: null };
 
   static getDerivedStateFromError(error: Error) {
@@ -32,6 +38,10 @@ export class MissingChunkBoundary extends Component<{ children: ReactNode }, { e
 
   override componentDidCatch(error: Error) {
     if (isMissingChunk(error) && mayReload(Date.now())) window.location.reload();
+  }
+
+  override componentDidUpdate(before: MissingChunkBoundaryProps) {
+    if (before.path !== this.props.path && this.state.error) this.setState({ error: null });
   }
 
   override render() {

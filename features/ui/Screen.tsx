@@ -1,6 +1,7 @@
 import type { Href } from "expo-router";
 import { useEffect, useRef, type ReactNode } from "react";
 import { View, type Text as NativeText } from "react-native";
+import { Heading } from "./Heading";
 import { PhoneTop, WideHead, type Crumb } from "./ScreenHead";
 import { useShell } from "./ShellContext";
 import { colors, sizes } from "./theme";
@@ -27,11 +28,13 @@ export interface ScreenProps {
   wide?: boolean;
   /** the first page: name of the house instead of a title; the page brings its own h1 */
   brand?: boolean;
+  /** on the phone: the title stands large over the content, and the bar names the place it belongs to */
+  large?: boolean;
   children: ReactNode;
 }
 
 /** One page: sets the title, takes the focus to its h1 when one comes to it, and lays out head, content and actions. */
-export function Screen({ title, subtitle, crumb, back, closes = false, hideBar = false, actions, footer, wide = false, brand = false, children }: ScreenProps) {
+export function Screen({ title, subtitle, crumb, back, closes = false, hideBar = false, actions, footer, wide = false, brand = false, large = false, children }: ScreenProps) {
   const { pathname, arrive, setBarHidden, barHidden } = useShell();
   const phone = useLayout() === "phone";
   const heading = useRef<NativeText>(null);
@@ -50,7 +53,7 @@ export function Screen({ title, subtitle, crumb, back, closes = false, hideBar =
     return () => setBarHidden(false);
   }, [hideBar, setBarHidden]);
 
-  const head = { title, subtitle, crumb, back, brand, closes, heading };
+  const head = { title, subtitle, crumb, back, brand, large, closes, heading };
   const foot = footer ?? actions;
   if (!phone) {
     return (
@@ -66,7 +69,14 @@ export function Screen({ title, subtitle, crumb, back, closes = false, hideBar =
     <View style={{ flexGrow: 1 }}>
       <PhoneTop {...head} />
       <View role="main" nativeID="main" {...webProps({ tabIndex: -1 })} style={[{ flexGrow: 1 }, webStyle({ outlineStyle: "none" })]}>
-        <View style={{ flexGrow: 1, paddingHorizontal: sizes.gutterPhone, paddingBottom: foot ? 8 : 24 }}>{children}</View>
+        <View style={{ flexGrow: 1, paddingHorizontal: sizes.gutterPhone, paddingBottom: foot ? 8 : 24 }}>
+          {large && (
+            <Heading ref={heading} level={1} size={26} focusable style={{ marginTop: 2, marginBottom: 12 }}>
+              {title}
+            </Heading>
+          )}
+          {children}
+        </View>
         {foot !== undefined && foot !== null && (
           <View
             style={[

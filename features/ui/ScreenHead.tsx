@@ -20,6 +20,8 @@ export interface ScreenHeadProps {
   back?: Href | undefined;
   /** the first page: the name of the house stands at the top instead of a title */
   brand: boolean;
+  /** on the phone the title stands large over the content */
+  large: boolean;
   /** a cross instead of an arrow, where going back gives something up */
   closes: boolean;
   heading: Ref<NativeText>;
@@ -37,7 +39,7 @@ function BackLink({ href, closes }: { href: Href; closes: boolean }) {
 }
 
 /** Top bar of the phone, 56 high: way back, title, who is singing. */
-export function PhoneTop({ title, subtitle, crumb, back, brand, closes, heading }: ScreenHeadProps) {
+export function PhoneTop({ title, subtitle, crumb, back, brand, large, closes, heading }: ScreenHeadProps) {
   const way = back ?? crumb?.href;
   return (
     <View role="banner" style={{ flexDirection: "row", alignItems: "center", gap: 8, minHeight: sizes.top, paddingLeft: way === undefined ? 16 : 4, paddingRight: 10, flexShrink: 0 }}>
@@ -51,9 +53,15 @@ export function PhoneTop({ title, subtitle, crumb, back, brand, closes, heading 
       <View style={{ flexGrow: 1, flexShrink: 1, minWidth: 0, paddingVertical: 6 }}>
         {!brand && (
           <>
-            <Heading ref={heading} level={1} focusable style={{ fontFamily: fonts.text, fontWeight: "600", fontSize: 16, lineHeight: 19, letterSpacing: 0 }}>
-              {title}
-            </Heading>
+            {large ? (
+              <Text variant="strong" style={{ lineHeight: 19 }}>
+                {crumb?.label}
+              </Text>
+            ) : (
+              <Heading ref={heading} level={1} focusable style={{ fontFamily: fonts.text, fontWeight: "600", fontSize: 16, lineHeight: 19, letterSpacing: 0 }}>
+                {title}
+              </Heading>
+            )}
             {subtitle !== undefined && (
               <Text variant="tiny" tone="soft" style={[oneLine, { lineHeight: 15, marginTop: 2 }]}>
                 {subtitle}

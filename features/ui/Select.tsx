@@ -1,4 +1,5 @@
-import { useId, useState } from "react";
+import { useId, useState, type CSSProperties } from "react";
+import { setAccidentals } from "./accidentals";
 import { Icon } from "./Icon";
 import { colors, fonts } from "./theme";
 
@@ -13,29 +14,36 @@ export interface SelectProps<Value extends string> {
   testID?: string;
 }
 
-/** One of many from a list that the browser opens itself. */
+/** One of many from a list that the browser opens itself. The chosen one is set by the page, because a list sets no accidentals. */
 export function Select<Value extends string>({ label, options, value, onChange, inline = false, error, testID }: SelectProps<Value>) {
   const id = useId();
   const [focused, setFocused] = useState(false);
+  const shown = options.find((option) => option.value === value)?.label ?? "";
   const list = (
-    <select
-      id={id}
-      value={value}
-      data-testid={testID}
-      aria-label={inline ? label : undefined}
-      aria-invalid={error === undefined ? undefined : true}
-      aria-describedby={error === undefined ? undefined : `${id}-note`}
-      onChange={(event) => onChange(event.target.value as Value)}
-      onFocus={() => setFocused(true)}
-      onBlur={() => setFocused(false)}
-      style={inline ? inWords(focused) : inField(focused, error !== undefined)}
-    >
-      {options.map((option) => (
-        <option key={option.value} value={option.value}>
-          {option.label}
-        </option>
-      ))}
-    </select>
+    <span style={{ position: "relative", ...(inline ? inWords(focused) : inField(focused, error !== undefined)) }}>
+      <span aria-hidden style={{ overflow: "hidden", textOverflow: "ellipsis", whiteSpace: "nowrap" }}>
+        {setAccidentals(shown)}
+      </span>
+      {!inline && <Icon name="down" size={20} color={colors.inkSoft} />}
+      <select
+        id={id}
+        value={value}
+        data-testid={testID}
+        aria-label={inline ? label : undefined}
+        aria-invalid={error === undefined ? undefined : true}
+        aria-describedby={error === undefined ? undefined : `${id}-note`}
+        onChange={(event) => onChange(event.target.value as Value)}
+        onFocus={() => setFocused(true)}
+        onBlur={() => setFocused(false)}
+        style={{ position: "absolute", inset: 0, width: "100%", height: "100%", opacity: 0, cursor: "pointer", font: `400 16px/22px ${fonts.text}` }}
+      >
+        {options.map((option) => (
+          <option key={option.value} value={option.value}>
+            {option.label}
+          </option>
+        ))}
+      </select>
+    </span>
   );
   if (inline) return list;
   return (
@@ -43,12 +51,7 @@ export function Select<Value extends string>({ label, options, value, onChange, 
       <label htmlFor={id} style={{ font: `600 14px/18px ${fonts.text}`, color: colors.ink }}>
         {label}
       </label>
-      <div style={{ position: "relative", display: "grid" }}>
-        {list}
-        <span style={{ position: "absolute", right: 12, top: 16, height: 20, pointerEvents: "none" }}>
-          <Icon name="down" size={20} color={colors.inkSoft} />
-        </span>
-      </div>
+      {list}
       {error !== undefined && (
         <span id={`${id}-note`} aria-live="polite" style={{ font: `400 12px/16px ${fonts.text}`, color: colors.brick, display: "flex", gap: 5 }}>
           <Icon name="warning" size={16} color={colors.brick} />
@@ -59,35 +62,32 @@ export function Select<Value extends string>({ label, options, value, onChange, 
   );
 }
 
-const face = { appearance: "none", color: colors.ink, margin: 0 } as const;
-
-function inField(focused: boolean, wrong: boolean): React.CSSProperties {
+function inField(focused: boolean, wrong: boolean): CSSProperties {
   const edge = focused ? colors.plum : wrong ? colors.brick : colors.inkSoft;
   return {
-    ...face,
+    display: "flex",
+    alignItems: "center",
+    justifyContent: "space-between",
+    gap: 8,
     font: `400 16px/22px ${fonts.text}`,
+    color: colors.ink,
     minHeight: 52,
-    minWidth: 0,
+    boxSizing: "border-box",
     border: `1.5px ${wrong ? "dashed" : "solid"} ${edge}`,
     borderRadius: 10,
     background: colors.card,
-    padding: "8px 40px 8px 14px",
+    padding: "8px 12px 8px 14px",
     boxShadow: focused ? `0 0 0 1.5px ${colors.plum}` : "none",
   };
 }
 
-function inWords(focused: boolean): React.CSSProperties {
+function inWords(focused: boolean): CSSProperties {
   return {
-    ...face,
-    font: `600 16px/24px ${fonts.text}`,
-    minHeight: 32,
+    display: "inline-flex",
     maxWidth: "100%",
-    border: 0,
+    font: `600 16px/26px ${fonts.text}`,
+    color: colors.ink,
     borderBottom: `1.5px solid ${colors.plum}`,
-    borderRadius: focused ? 4 : 0,
-    background: "transparent",
-    padding: 0,
-    textOverflow: "ellipsis",
-    ...(focused ? { outline: `2px solid ${colors.plum}`, outlineOffset: 3 } : null),
+    ...(focused ? { outline: `2px solid ${colors.plum}`, outlineOffset: 3, borderRadius: 2 } : null),
   };
 }

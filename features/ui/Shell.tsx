@@ -45,7 +45,7 @@ export function Shell({ initial = null, children }: ShellProps) {
       <View style={[{ flexGrow: 1, flexDirection: phone ? "column" : "row", backgroundColor: colors.paper }, webStyle({ minHeight: "100dvh" })]}>
         {!phone && <Rail wide={layout === "wide"} />}
         <View style={{ flexGrow: 1, flexShrink: 1, flexBasis: phone ? "auto" : 0, minWidth: 0 }}>
-          <MissingChunkBoundary key={pathname}>{children}</MissingChunkBoundary>
+          <MissingChunkBoundary path={pathname}>{children}</MissingChunkBoundary>
         </View>
         {phone && !barHidden && <BottomBar />}
       </View>

@@ -90,9 +90,9 @@ body{margin:0;background:var(--paper);color:var(--ink);font:400 16px/1.45 ${font
 h1:focus-visible{outline-offset:4px;border-radius:4px}
 input:focus-visible,textarea:focus-visible,select:focus-visible{outline:none}
 input::placeholder,textarea::placeholder{color:var(--inkSoft);opacity:1}
-span.mu{display:inline-block;font-family:${fonts.music};font-weight:400;font-size:1.16em;line-height:0;position:relative;top:-.14em;margin:0 .01em;-webkit-text-stroke:.022em currentColor}
+span.mu{font-family:${fonts.music};font-weight:400;font-size:1.16em;line-height:0;position:relative;top:-.14em;margin:0 .01em;-webkit-text-stroke:.022em currentColor}
 span.mu.fl{top:-.09em}
-[data-mono] span.mu{width:.522em;margin:0;text-align:center}
+[data-mono] span.mu{display:inline-block;width:.522em;margin:0;text-align:center}
 a{color:inherit;text-decoration:none}
 form{margin:0}
 .skip{position:absolute;left:8px;top:-80px;z-index:9;background:var(--card);color:var(--plum);font-weight:600;padding:14px 20px;border-radius:14px;border:1.5px solid var(--plum)}

@@ -7,6 +7,7 @@ import { Field } from "@/features/ui/Field";
 import { Form } from "@/features/ui/Form";
 import { Heading } from "@/features/ui/Heading";
 import type { Voice } from "@/shared/contract/voice";
+import { pickVoice } from "./useSingingVoice";
 import { newVoice } from "./voiceQueries";
 
 export interface KeepTakeProps {
@@ -20,7 +21,7 @@ export interface KeepTakeProps {
 /** Into which voice the take goes: one that is there, or a new one with a name. */
 export function KeepTake({ voices, chosenId, busy, onKeep, onCancel }: KeepTakeProps) {
   const [fresh] = useState(() => newVoice(""));
-  const [place, setPlace] = useState(chosenId ?? voices[0]?.id ?? fresh.id);
+  const [place, setPlace] = useState(pickVoice(voices, undefined, chosenId)?.id ?? fresh.id);
   const [name, setName] = useState("");
   const [error, setError] = useState<string>();
   const keep = () => {

@@ -23,17 +23,20 @@ export interface ListeningScreenProps {
 /** Room for the head, the note, level, time and Stop; the trail has what is left. */
 const aroundTrail = 56 + 72 + 224;
 
+/** The tracker decides a frame this much later; the trail's end waits for it, so that bar and dot stay together. */
+const lookAheadS = 0.16;
+
 /** While singing: the note, the trail, how loud and how long, and Stop under the thumb. */
 export function ListeningScreen({ live, seconds, stopping, onStop }: ListeningScreenProps) {
   const phone = useLayout() === "phone";
   const { height } = useWindowDimensions();
   return (
-    <Screen title="Listening" subtitle="Any song you know, no instrument" back="/voice" closes hideBar wide>
+    <Screen title="Listening" subtitle="Any song you know, no instrument" back="/voice" closes hideBar>
       <NoteWords live={live} />
       <View style={{ marginTop: 12, marginHorizontal: phone ? -sizes.gutterPhone : 0 }}>
         <LiveTrail live={live} height={Math.max(220, Math.min(560, height - aroundTrail - (phone ? 0 : 40)))} />
       </View>
-      <View style={{ gap: 14, paddingTop: 16, maxWidth: phone ? undefined : 560, width: "100%", marginTop: "auto" }}>
+      <View style={{ gap: 14, paddingTop: 16, marginTop: "auto" }}>
         <LiveLevel live={live} />
         <TimeRow seconds={seconds} />
         <Text variant="small" tone="soft" style={{ marginTop: -6, paddingLeft: 56 }}>
@@ -71,7 +74,7 @@ function LiveTrail({ live, height }: { live: LiveSound; height: number }) {
   const [width, setWidth] = useState(0);
   return (
     <View onLayout={({ nativeEvent }) => setWidth(nativeEvent.layout.width)} style={{ height }}>
-      {width > 0 && <PitchTrail frames={live.frames} now={timeOf(live, nowMs)} width={width} height={height} testID="pitch-trail" />}
+      {width > 0 && <PitchTrail frames={live.frames} now={Math.max(0, timeOf(live, nowMs) - lookAheadS)} width={width} height={height} testID="pitch-trail" />}
     </View>
   );
 }

@@ -30,13 +30,15 @@ export function noteNow(frames: readonly LiveFrame[]): NoteNow | null {
   for (let k = frames.length - 1; k >= 0; k -= 1) {
     const hz = frames[k]?.hz ?? null;
     if (hz === null || Math.abs(hzToMidi(hz) - centre) > sameNoteSemitones) gap += 1;
-    else gap = 0;
+    else {
+      gap = 0;
+      held = frames.length - k;
+    }
     if (gap > gapFrames) break;
-    held += 1;
   }
   const midi = Math.round(centre);
   const cents = Math.round(100 * (centre - midi));
-  return { midi, cents, heldS: Math.max(0, held - gap) / 100, words: wordsFor(cents) };
+  return { midi, cents, heldS: held / 100, words: wordsFor(cents) };
 }
 
 function wordsFor(cents: number): NoteNow["words"] {

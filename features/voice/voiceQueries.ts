@@ -1,4 +1,5 @@
 import { queryOptions, useMutation, useQueryClient } from "@tanstack/react-query";
+import { newId } from "@/features/api/newId";
 import { shelf } from "@/features/api/shelf";
 import type { Take } from "@/shared/contract/take";
 import type { Voice } from "@/shared/contract/voice";
@@ -16,7 +17,7 @@ export const voiceQueries = {
 
 /** A new voice without any notes yet. */
 export function newVoice(name: string): Voice {
-  return { id: crypto.randomUUID(), name, byHand: null, createdAt: new Date().toISOString() };
+  return { id: newId(), name, byHand: null, createdAt: new Date().toISOString() };
 }
 
 function useFresh() {

@@ -1,3 +1,4 @@
+import { newId } from "@/features/api/newId";
 import { hear, silence, type LiveSound } from "./liveSound";
 import { MicrophoneUnavailable, openMicrophone, type Microphone } from "./microphone";
 import { openTakeWorker } from "./openTakeWorker";
@@ -73,7 +74,7 @@ export function createCapture(emit: (event: RecorderEvent) => void, live: LiveSo
           return;
         }
         microphone = opened;
-        const take = { id: crypto.randomUUID(), sungAt: new Date().toISOString() };
+        const take = { id: newId(), sungAt: new Date().toISOString() };
         markTakeOfThisTab(take.id);
         void beginUnkept({ ...take, sampleRate: opened.sampleRate }).catch(() => undefined);
         tell({ kind: "begin", sampleRate: opened.sampleRate, sound: port2, keepAs: take.id }, [port2]);

@@ -1,0 +1,50 @@
+import { act, fireEvent, render, screen, waitFor } from "@testing-library/react";
+import { ByHandForm } from "./ByHandForm";
+
+const type = (id: string, text: string) => fireEvent.change(screen.getByTestId(id), { target: { value: text } });
+const valueOf = (id: string) => (screen.getByTestId(id) as HTMLInputElement).value;
+const send = () => act(async () => fireEvent.submit(screen.getByRole("form")));
+
+function open(onKeep = jest.fn(), voice: Parameters<typeof ByHandForm>[0]["voice"] = null) {
+  render(<ByHandForm voice={voice} busy={false} refusal={null} onKeep={onKeep} />);
+  return onKeep;
+}
+
+it("tells each fault at its field, keeps what was typed, and keeps nothing", async () => {
+  const onKeep = open();
+  type("by-hand-lowest", "X4");
+  type("by-hand-highest", "G");
+  await send();
+  expect(screen.getByText(/There is no X4/)).toBeTruthy();
+  expect(screen.getByText(/Which G/)).toBeTruthy();
+  expect(valueOf("by-hand-lowest")).toBe("X4");
+  expect(screen.getByTestId("by-hand-lowest").getAttribute("aria-invalid")).toBe("true");
+  expect(onKeep).not.toHaveBeenCalled();
+});
+
+it("keeps the notes once they can be read", async () => {
+  const onKeep = open();
+  type("by-hand-lowest", "X4");
+  await send();
+  type("by-hand-lowest", "F3");
+  type("by-hand-highest", "C5");
+  await waitFor(() => expect(screen.queryByText(/There is no X4/)).toBeNull());
+  await send();
+  expect(onKeep).toHaveBeenCalledWith({ range: { lowMidi: 53, highMidi: 72 }, comfort: { lowMidi: 55, highMidi: 69 } });
+});
+
+it("fills the chosen field by a tap on the ladder and moves a note by a semitone", async () => {
+  open();
+  await act(async () => fireEvent.click(screen.getByRole("button", { name: "G3" })));
+  expect(valueOf("by-hand-lowest")).toBe("G3");
+  await act(async () => fireEvent.click(screen.getByRole("button", { name: "Lowest note: a semitone higher" })));
+  expect(valueOf("by-hand-lowest")).toBe("G#3");
+  await act(async () => fireEvent.click(screen.getByRole("radio", { name: "Highest" })));
+  await act(async () => fireEvent.click(screen.getByRole("button", { name: "D5" })));
+  expect(valueOf("by-hand-highest")).toBe("D5");
+});
+
+it("begins with the notes that the voice has", () => {
+  open(jest.fn(), { range: { lowMidi: 53.2, highMidi: 71.8 }, comfort: { lowMidi: 55, highMidi: 69 } });
+  expect(["lowest", "highest", "comfortLow", "comfortTop"].map((name) => valueOf(`by-hand-${name}`))).toEqual(["F3", "C5", "G3", "A4"]);
+});

@@ -1,0 +1,60 @@
+import type { Take } from "@/shared/contract/take";
+import type { Voice } from "@/shared/contract/voice";
+import { singingVoiceOf } from "./singingVoiceOf";
+import { pickVoice } from "./useSingingVoice";
+
+const voice: Voice = { id: "v1", name: "My voice", byHand: null, createdAt: "2026-11-01T10:00:00.000Z" };
+const take = (id: string, change: Partial<Take> = {}): Take => ({
+  id,
+  voiceId: "v1",
+  sungAt: "2026-11-05T19:20:00.000Z",
+  warmedUp: null,
+  effort: null,
+  durationS: 9,
+  range: { lowMidi: 53, highMidi: 72 },
+  comfort: { lowMidi: 55, highMidi: 69 },
+  estimate: { lowMidi: 51, highMidi: 74 },
+  tuningCents: 0,
+  certainty: 0.7,
+  reasons: [],
+  notes: [],
+  ...change,
+});
+
+it("knows nothing of a voice without takes", () => {
+  expect(singingVoiceOf(voice, [])).toBeNull();
+  expect(singingVoiceOf(voice, [take("t1", { voiceId: "another" })])).toBeNull();
+});
+
+it("says what the takes of this voice say, and only of this one", () => {
+  const other = take("t2", { voiceId: "another", range: { lowMidi: 40, highMidi: 80 } });
+  expect(singingVoiceOf(voice, [take("t1"), other])).toEqual({ range: { lowMidi: 53, highMidi: 72 }, comfort: { lowMidi: 55, highMidi: 69 } });
+});
+
+it("is again what it was when a take is erased", () => {
+  const before = singingVoiceOf(voice, [take("t1")]);
+  const wider = singingVoiceOf(voice, [take("t1"), take("t2", { range: { lowMidi: 50, highMidi: 74 } })]);
+  expect(wider?.range.highMidi).toBeGreaterThan(72);
+  expect(singingVoiceOf(voice, [take("t1")])).toEqual(before);
+});
+
+it("takes the singer's own tuning off, so that notes keep the names they had on the result", () => {
+  const flat = take("t1", { tuningCents: -40, range: { lowMidi: 52.6, highMidi: 71.6 }, comfort: { lowMidi: 54.6, highMidi: 68.6 } });
+  const singing = singingVoiceOf(voice, [flat]);
+  expect(singing?.range.lowMidi).toBeCloseTo(53, 10);
+  expect(singing?.comfort.highMidi).toBeCloseTo(69, 10);
+});
+
+it("prefers notes set by hand, with comfort inside the range", () => {
+  const byHand = { range: { lowMidi: 50, highMidi: 70 }, comfort: { lowMidi: 48, highMidi: 66 } };
+  expect(singingVoiceOf({ ...voice, byHand }, [take("t1")])).toEqual({ range: byHand.range, comfort: { lowMidi: 50, highMidi: 66 } });
+});
+
+it("picks the voice asked for, else the chosen one, else the first", () => {
+  const second = { ...voice, id: "v2" };
+  expect(pickVoice([voice, second], "v2", "v1")).toBe(second);
+  expect(pickVoice([voice, second], "gone", "v1")).toBeNull();
+  expect(pickVoice([voice, second], undefined, "v2")).toBe(second);
+  expect(pickVoice([voice, second], undefined, "gone")).toBe(voice);
+  expect(pickVoice([], undefined, null)).toBeNull();
+});

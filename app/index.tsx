@@ -43,7 +43,15 @@ export default function HomeRoute() {
   return (
     <Screen title="Larkspan" brand wide>
       <View style={{ flexGrow: 1, justifyContent: "space-between", gap: 32 }}>
-        <View style={{ flexDirection: beside ? "row" : "column", alignItems: beside ? "center" : "flex-start", justifyContent: "space-between", gap: wide ? 56 : 24, flexGrow: 1 }}>
+        <View
+          style={{
+            flexDirection: beside ? "row" : "column",
+            alignItems: beside ? "center" : "flex-start",
+            justifyContent: "space-between",
+            gap: wide ? 56 : 24,
+            flexGrow: 1,
+          }}
+        >
           <View style={{ flexShrink: 1, maxWidth: 600, gap: wide ? 32 : 24 }}>
             <Heading level={1} size={wide ? 52 : 36} focusable>
               {headline}

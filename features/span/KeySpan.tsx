@@ -24,7 +24,16 @@ export interface KeySpanProps {
 }
 
 /** Row of the key table: bands of the voice behind, the song's marks in front, all rows on one scale. */
-export function KeySpan({ voice, marks, scale, perSemitone = 14.4, height = 51, spelling = "sharps", selected = false, summary }: KeySpanProps) {
+export function KeySpan({
+  voice,
+  marks,
+  scale,
+  perSemitone = 14.4,
+  height = 51,
+  spelling = "sharps",
+  selected = false,
+  summary,
+}: KeySpanProps) {
   const id = useDrawingId();
   const fine = perSemitone < 8;
   const width = keySpanWidth(scale, perSemitone);
@@ -39,47 +48,124 @@ export function KeySpan({ voice, marks, scale, perSemitone = 14.4, height = 51, 
   const first = sorted[0];
   const last = sorted[sorted.length - 1];
   const name = (midi: number) => glyphs(noteName(midi, spelling));
-  const tone = (mark: KeyMark) => (mark.zone === "beyond" ? colors.brick : mark.zone === "reach" ? colors.honeyText : colors.ink);
+  const tone = (mark: KeyMark) =>
+    mark.zone === "beyond" ? colors.brick : mark.zone === "reach" ? colors.honeyText : colors.ink;
   const rungs = Array.from({ length: scale.high - scale.low + 1 }, (_, index) => scale.low + index).filter(isNatural);
   return (
-    <Svg width={width} height={height} viewBox={`0 0 ${width} ${height}`} role="img" aria-label={summary ?? ladderWords(voice, marks, spelling)} style={{ display: "flex", ...(selected ? { ["--ground" as string]: "var(--card)" } : null) }}>
-      <Hatch id={`${id}h`} pitch={fine ? 3.4 : 5} line={fine ? 1.9 : 2} under={fine ? "none" : colors.honey} underOpacity={0.16} />
+    <Svg
+      width={width}
+      height={height}
+      viewBox={`0 0 ${width} ${height}`}
+      role="img"
+      aria-label={summary ?? ladderWords(voice, marks, spelling)}
+      style={{ display: "flex", ...(selected ? { ["--ground" as string]: "var(--card)" } : null) }}
+    >
+      <Hatch
+        id={`${id}h`}
+        pitch={fine ? 3.4 : 5}
+        line={fine ? 1.9 : 2}
+        under={fine ? "none" : colors.honey}
+        underOpacity={0.16}
+      />
       <Hatch id={`${id}w`} pitch={soft.pitch} line={1} lineOpacity={0.42} under="none" />
       <Rect x={left} y={0} width={softLeft - left} height={height} fill={`url(#${id}w)`} />
       <Rect x={softRight} y={0} width={right - softRight} height={height} fill={`url(#${id}w)`} />
       <Rect x={softLeft} y={0} width={softRight - softLeft} height={height} fill="var(--band)" />
-      {!fine && rungs.map((midi) => <Line key={midi} x1={x(midi)} x2={x(midi)} y1={0} y2={height} stroke={colors.line} strokeWidth={1} {...(midi % 12 === 0 ? null : { strokeDasharray: "1 4" })} />)}
+      {!fine &&
+        rungs.map((midi) => (
+          <Line
+            key={midi}
+            x1={x(midi)}
+            x2={x(midi)}
+            y1={0}
+            y2={height}
+            stroke={colors.line}
+            strokeWidth={1}
+            {...(midi % 12 === 0 ? null : { strokeDasharray: "1 4" })}
+          />
+        ))}
       {[softLeft, softRight].map((edge) => (
         <Line key={edge} x1={edge} x2={edge} y1={0} y2={height} stroke={colors.lagoon} strokeWidth={fine ? 1.3 : 1.5} />
       ))}
       {[left, right].map((edge) => (
-        <Line key={edge} x1={edge} x2={edge} y1={0} y2={height} stroke={colors.honey} strokeWidth={fine ? 1 : 1.2} strokeDasharray={soft.dash} />
+        <Line
+          key={edge}
+          x1={edge}
+          x2={edge}
+          y1={0}
+          y2={height}
+          stroke={colors.honey}
+          strokeWidth={fine ? 1 : 1.2}
+          strokeDasharray={soft.dash}
+        />
       ))}
-      {first && last && <Line x1={x(first.midi)} x2={x(last.midi)} y1={middle} y2={middle} stroke={colors.inkSoft} strokeWidth={1} />}
+      {first && last && (
+        <Line x1={x(first.midi)} x2={x(last.midi)} y1={middle} y2={middle} stroke={colors.inkSoft} strokeWidth={1} />
+      )}
       {sorted.map((mark) => {
         const tall = markHeight(mark.share, longest, tallest);
-        const box = { x: x(mark.midi) - thick / 2, y: middle - tall / 2, width: thick, height: tall, rx: Math.min(3, thick / 2) };
+        const box = {
+          x: x(mark.midi) - thick / 2,
+          y: middle - tall / 2,
+          width: thick,
+          height: tall,
+          rx: Math.min(3, thick / 2),
+        };
         return (
           <G key={mark.midi}>
             {mark.zone === "comfort" ? (
               <Rect {...box} fill={colors.lagoon} />
             ) : (
               <G>
-                <Rect {...box} fill={ground} {...(mark.zone === "beyond" ? { stroke: colors.brick, strokeWidth: fine ? 1.2 : 1.5, strokeDasharray: "1.5 2", strokeLinecap: "round" as const } : null)} />
-                {mark.zone === "reach" && <Rect {...box} fill={`url(#${id}h)`} {...(fine ? null : { stroke: colors.honey, strokeWidth: 1.2 })} />}
+                <Rect
+                  {...box}
+                  fill={ground}
+                  {...(mark.zone === "beyond"
+                    ? {
+                        stroke: colors.brick,
+                        strokeWidth: fine ? 1.2 : 1.5,
+                        strokeDasharray: "1.5 2",
+                        strokeLinecap: "round" as const,
+                      }
+                    : null)}
+                />
+                {mark.zone === "reach" && (
+                  <Rect
+                    {...box}
+                    fill={`url(#${id}h)`}
+                    {...(fine ? null : { stroke: colors.honey, strokeWidth: 1.2 })}
+                  />
+                )}
               </G>
             )}
-            {mark.home && !fine && <Circle cx={x(mark.midi)} cy={middle} r={2.6} fill={mark.zone === "comfort" ? ground : colors.ink} />}
+            {mark.home && !fine && (
+              <Circle cx={x(mark.midi)} cy={middle} r={2.6} fill={mark.zone === "comfort" ? ground : colors.ink} />
+            )}
           </G>
         );
       })}
       {first && (!fine || first.zone === "beyond") && (
-        <SvgLabel x={x(first.midi) - thick - (fine ? 1 : 0)} y={middle + 4} size={fine ? 9 : 11.5} family="mono" anchor="end" halo fill={tone(first)}>
+        <SvgLabel
+          x={x(first.midi) - thick - (fine ? 1 : 0)}
+          y={middle + 4}
+          size={fine ? 9 : 11.5}
+          family="mono"
+          anchor="end"
+          halo
+          fill={tone(first)}
+        >
           {`${first.zone === "beyond" && sideOf(first.midi, voice) === "below" ? "▼ " : ""}${fine ? "" : name(first.midi)}`.trim()}
         </SvgLabel>
       )}
       {last && (!fine || last.zone === "beyond") && (
-        <SvgLabel x={x(last.midi) + thick + (fine ? 1 : 0)} y={middle + 4} size={fine ? 9 : 11.5} family="mono" halo fill={tone(last)}>
+        <SvgLabel
+          x={x(last.midi) + thick + (fine ? 1 : 0)}
+          y={middle + 4}
+          size={fine ? 9 : 11.5}
+          family="mono"
+          halo
+          fill={tone(last)}
+        >
           {`${fine ? "" : name(last.midi)}${last.zone === "beyond" && sideOf(last.midi, voice) === "above" ? " ▲" : ""}`.trim()}
         </SvgLabel>
       )}

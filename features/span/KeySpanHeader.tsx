@@ -21,17 +21,35 @@ export function KeySpanHeader({ voice, scale, perSemitone = 14.4, spelling = "fl
   const low = name(voice.comfort.lowMidi);
   const high = name(voice.comfort.highMidi);
   const roomy = softRight - softLeft > 160;
-  const naturals = Array.from({ length: scale.high - scale.low + 1 }, (_, index) => scale.low + index).filter(isNatural);
+  const naturals = Array.from({ length: scale.high - scale.low + 1 }, (_, index) => scale.low + index).filter(
+    isNatural,
+  );
   const reach = [
     { from: left, to: softLeft },
     { from: softRight, to: right },
   ].filter(({ from, to }) => to - from > 34);
   return (
-    <Svg width={width} height={56} viewBox={`0 0 ${width} 56`} role="img" aria-label={`Scale from ${name(scale.low)} to ${name(scale.high)}. Comfort band ${low} to ${high}.`} style={{ display: "flex" }}>
+    <Svg
+      width={width}
+      height={56}
+      viewBox={`0 0 ${width} 56`}
+      role="img"
+      aria-label={`Scale from ${name(scale.low)} to ${name(scale.high)}. Comfort band ${low} to ${high}.`}
+      style={{ display: "flex" }}
+    >
       {naturals.map((midi) => {
         const octave = midi % 12 === 0;
         return (
-          <SvgLabel key={midi} x={keySpanX(midi, scale, perSemitone)} y={47} size={octave ? 12 : 11} family="mono" weight={octave ? "600" : "400"} anchor="middle" fill={octave ? colors.ink : colors.inkSoft}>
+          <SvgLabel
+            key={midi}
+            x={keySpanX(midi, scale, perSemitone)}
+            y={47}
+            size={octave ? 12 : 11}
+            family="mono"
+            weight={octave ? "600" : "400"}
+            anchor="middle"
+            fill={octave ? colors.ink : colors.inkSoft}
+          >
             {octave ? name(midi) : name(midi).charAt(0)}
           </SvgLabel>
         );
@@ -40,14 +58,31 @@ export function KeySpanHeader({ voice, scale, perSemitone = 14.4, spelling = "fl
         <Line key={edge} x1={edge} x2={edge} y1={28} y2={56} stroke={colors.lagoon} strokeWidth={1.5} />
       ))}
       {[left, right].map((edge) => (
-        <Line key={edge} x1={edge} x2={edge} y1={28} y2={56} stroke={colors.honey} strokeWidth={1.2} strokeDasharray="5 3" />
+        <Line
+          key={edge}
+          x1={edge}
+          x2={edge}
+          y1={28}
+          y2={56}
+          stroke={colors.honey}
+          strokeWidth={1.2}
+          strokeDasharray="5 3"
+        />
       ))}
       <SvgLabel x={(softLeft + softRight) / 2} y={23} size={12} weight="600" anchor="middle" fill={colors.lagoon}>
         {`${roomy ? "comfort band " : ""}${low} to ${high}`}
       </SvgLabel>
       <G>
         {reach.map(({ from, to }) => (
-          <SvgLabel key={from} x={(from + to) / 2} y={23} size={12} weight="600" anchor="middle" fill={colors.honeyText}>
+          <SvgLabel
+            key={from}
+            x={(from + to) / 2}
+            y={23}
+            size={12}
+            weight="600"
+            anchor="middle"
+            fill={colors.honeyText}
+          >
             reach
           </SvgLabel>
         ))}

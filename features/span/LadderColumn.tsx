@@ -45,7 +45,13 @@ export function LadderColumn({ id, voice, scale, step, pad, x, words = [] }: Lad
       </Defs>
       <G clipPath={`url(#${id}c)`}>
         <Rect x={x} y={top} width={column} height={bottom - top} fill={`url(#${id}h)`} />
-        <Rect x={x} y={softTop - (reachAbove ? gap : 0)} width={column} height={softBottom - softTop + (reachAbove ? gap : 0) + (reachBelow ? gap : 0)} fill={ground} />
+        <Rect
+          x={x}
+          y={softTop - (reachAbove ? gap : 0)}
+          width={column}
+          height={softBottom - softTop + (reachAbove ? gap : 0) + (reachBelow ? gap : 0)}
+          fill={ground}
+        />
         <Rect x={x} y={softTop} width={column} height={softBottom - softTop} fill={colors.lagoon} />
       </G>
       {inside.map((y) => (
@@ -68,7 +74,16 @@ export function LadderColumn({ id, voice, scale, step, pad, x, words = [] }: Lad
         />
       )}
       {words.map((word, index) => (
-        <SvgLabel key={word} x={x + column / 2} y={softBottom - step * (1.17 + 2 * (words.length - 1 - index))} size={14} family="display" weight="700" anchor="middle" fill={ground}>
+        <SvgLabel
+          key={word}
+          x={x + column / 2}
+          y={softBottom - step * (1.17 + 2 * (words.length - 1 - index))}
+          size={14}
+          family="display"
+          weight="700"
+          anchor="middle"
+          fill={ground}
+        >
           {word}
         </SvgLabel>
       ))}

@@ -56,9 +56,22 @@ export function LadderLabels({ labels, y, x, bracket }: LadderLabelsProps) {
       })}
       {comfort.length > 1 && lines.length > 0 && to - from > lines.length * 18 && (
         <G>
-          <Path d={`M${x + 5} ${from}V${to}`} stroke={colors.lagoon} strokeWidth={2.5} strokeLinecap="round" fill="none" />
+          <Path
+            d={`M${x + 5} ${from}V${to}`}
+            stroke={colors.lagoon}
+            strokeWidth={2.5}
+            strokeLinecap="round"
+            fill="none"
+          />
           {lines.map((line, index) => (
-            <SvgLabel key={line} x={x + 18} y={middle + 5 + (index - (lines.length - 1) / 2) * 18} size={14} weight="500" fill={colors.ink}>
+            <SvgLabel
+              key={line}
+              x={x + 18}
+              y={middle + 5 + (index - (lines.length - 1) / 2) * 18}
+              size={14}
+              weight="500"
+              fill={colors.ink}
+            >
               {line}
             </SvgLabel>
           ))}

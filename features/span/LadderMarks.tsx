@@ -20,7 +20,18 @@ export interface LadderMarksProps {
 }
 
 /** The song beside the column: ink where it sits well, hatched in reach, dotted with ▲ or ▼ beyond. */
-export function LadderMarks({ id, marks, voice, scale, step, pad, x, direction, height, perPercent }: LadderMarksProps) {
+export function LadderMarks({
+  id,
+  marks,
+  voice,
+  scale,
+  step,
+  pad,
+  x,
+  direction,
+  height,
+  perPercent,
+}: LadderMarksProps) {
   return (
     <G>
       {marks.map((mark) => {
@@ -52,8 +63,17 @@ export function LadderMarks({ id, marks, voice, scale, step, pad, x, direction, 
               strokeWidth={1.5}
               {...(beyond ? { strokeDasharray: "0.1 3.2", strokeLinecap: "round" as const } : null)}
             />
-            {mark.home && <Circle cx={x + direction * height} cy={y} r={height * 0.26} fill={beyond ? colors.brick : colors.honey} />}
-            {beyond && <Path d={`M${direction === 1 ? tip : tip - 9} ${y - rise / 2}h9l-4.5 ${rise}z`} fill={colors.brick} />}
+            {mark.home && (
+              <Circle
+                cx={x + direction * height}
+                cy={y}
+                r={height * 0.26}
+                fill={beyond ? colors.brick : colors.honey}
+              />
+            )}
+            {beyond && (
+              <Path d={`M${direction === 1 ? tip : tip - 9} ${y - rise / 2}h9l-4.5 ${rise}z`} fill={colors.brick} />
+            )}
           </G>
         );
       })}

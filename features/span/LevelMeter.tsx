@@ -32,7 +32,11 @@ export function LevelMeter({ levelDb, labelled = true }: LevelMeterProps) {
   const lit = litCells(levelDb);
   const word = levelWord(levelDb);
   const row = (
-    <View role="img" aria-label={`Level: ${word}`} style={{ flexDirection: "row", gap: 3, flexGrow: 1, flexShrink: 1, maxWidth: 480 }}>
+    <View
+      role="img"
+      aria-label={`Level: ${word}`}
+      style={{ flexDirection: "row", gap: 3, flexGrow: 1, flexShrink: 1, maxWidth: 480 }}
+    >
       {Array.from({ length: cells }, (_, index) => {
         const on = index < lit;
         const warn = index >= cells - hot;

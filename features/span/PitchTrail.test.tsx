@@ -82,7 +82,13 @@ describe("the trail's lines", () => {
   });
 
   it("hold what was sung, however wide", () => {
-    const scale = trailScale([{ t: 0, midi: 40 }, { t: 1, midi: 80 }], null);
+    const scale = trailScale(
+      [
+        { t: 0, midi: 40 },
+        { t: 1, midi: 80 },
+      ],
+      null,
+    );
     expect(scale.low).toBeLessThan(40);
     expect(scale.high).toBeGreaterThan(80);
   });

@@ -6,7 +6,18 @@ import { SvgLabel } from "@/features/ui/SvgLabel";
 import { colors, mixtures } from "@/features/ui/theme";
 import { ground } from "./Hatch";
 import { isNatural } from "./ladderGeometry";
-import { glides, lean, offsetWords, strength, trailNotes, trailPoints, trailScale, trailSeconds, type TrailNote, type TrailPoint } from "./trailGeometry";
+import {
+  glides,
+  lean,
+  offsetWords,
+  strength,
+  trailNotes,
+  trailPoints,
+  trailScale,
+  trailSeconds,
+  type TrailNote,
+  type TrailPoint,
+} from "./trailGeometry";
 
 export interface PitchTrailProps {
   /** of the live tracker, oldest first; older ones than 6 s are passed over */
@@ -43,13 +54,35 @@ export function PitchTrail({ frames, now, width, height, scale, frozen = false, 
   const newest = points[points.length - 1];
 
   return (
-    <Svg width={width} height={height} viewBox={`0 0 ${width} ${height}`} role="img" aria-label={trailWords(sounding)} {...(testID === undefined ? null : { testID })} style={{ display: "flex" }}>
+    <Svg
+      width={width}
+      height={height}
+      viewBox={`0 0 ${width} ${height}`}
+      role="img"
+      aria-label={trailWords(sounding)}
+      {...(testID === undefined ? null : { testID })}
+      style={{ display: "flex" }}
+    >
       {lines.map((midi) => (
-        <TrailLine key={midi} midi={midi} y={y(midi)} width={width} names={step >= 13 || midi % 12 === 0 || step * 2 >= 13} />
+        <TrailLine
+          key={midi}
+          midi={midi}
+          y={y(midi)}
+          width={width}
+          names={step >= 13 || midi % 12 === 0 || step * 2 >= 13}
+        />
       ))}
       {Array.from({ length: trailSeconds + 1 }, (_, ago) => (
         <G key={ago}>
-          <Line x1={x(now - ago)} x2={x(now - ago)} y1={axis} y2={axis + 5} stroke={colors.inkSoft} strokeOpacity={0.6} strokeWidth={1} />
+          <Line
+            x1={x(now - ago)}
+            x2={x(now - ago)}
+            y1={axis}
+            y2={axis + 5}
+            stroke={colors.inkSoft}
+            strokeOpacity={0.6}
+            strokeWidth={1}
+          />
           {ago % 2 === 0 && (
             <SvgLabel x={x(now - ago)} y={axis + 19} size={12} anchor="middle">
               {ago === 0 ? "now" : `${ago} s ago`}
@@ -57,11 +90,30 @@ export function PitchTrail({ frames, now, width, height, scale, frozen = false, 
           )}
         </G>
       ))}
-      <Path d={glides(notes).map(({ from, to }) => glidePath(x(from.end), y(from.midi) + tilt(from, x), x(to.start), y(to.midi) - tilt(to, x))).join("")} fill="none" stroke={colors.inkSoft} strokeOpacity={0.75} strokeWidth={1.5} />
+      <Path
+        d={glides(notes)
+          .map(({ from, to }) =>
+            glidePath(x(from.end), y(from.midi) + tilt(from, x), x(to.start), y(to.midi) - tilt(to, x)),
+          )
+          .join("")}
+        fill="none"
+        stroke={colors.inkSoft}
+        strokeOpacity={0.75}
+        strokeWidth={1.5}
+      />
       {notes.map((note) => (
         <TrailBar key={note.start} note={note} points={points} x={x} y={y} now={now} />
       ))}
-      <Line x1={nowX} x2={nowX} y1={0} y2={axis} stroke={colors.inkSoft} strokeOpacity={0.7} strokeWidth={1} strokeDasharray="2 4" />
+      <Line
+        x1={nowX}
+        x2={nowX}
+        y1={0}
+        y2={axis}
+        stroke={colors.inkSoft}
+        strokeOpacity={0.7}
+        strokeWidth={1}
+        strokeDasharray="2 4"
+      />
       {!frozen && sounding && newest && <OpenEnd x={nowX} y={y(sounding.midi)} />}
     </Svg>
   );
@@ -72,9 +124,25 @@ function TrailLine({ midi, y, width, names }: { midi: number; y: number; width: 
   const octave = midi % 12 === 0;
   return (
     <G>
-      <Line x1={48} x2={width} y1={y} y2={y} stroke={octave ? mixtures.rungC : colors.line} strokeWidth={1} {...(natural ? null : { strokeDasharray: "1 7", strokeLinecap: "round" as const })} />
+      <Line
+        x1={48}
+        x2={width}
+        y1={y}
+        y2={y}
+        stroke={octave ? mixtures.rungC : colors.line}
+        strokeWidth={1}
+        {...(natural ? null : { strokeDasharray: "1 7", strokeLinecap: "round" as const })}
+      />
       {natural && names && (
-        <SvgLabel x={40} y={y + 4.5} size={13} family="display" weight="600" anchor="end" fill={octave ? colors.ink : colors.inkSoft}>
+        <SvgLabel
+          x={40}
+          y={y + 4.5}
+          size={13}
+          family="display"
+          weight="600"
+          anchor="end"
+          fill={octave ? colors.ink : colors.inkSoft}
+        >
           {noteName(midi)}
         </SvgLabel>
       )}
@@ -107,9 +175,25 @@ function TrailBar({ note, points, x, y, now }: TrailBarProps) {
   return (
     <G>
       <G transform={`translate(${middle} ${y(note.midi)}) rotate(${angle})`}>
-        <Rect x={-long / 2} y={-6} width={long} height={12} rx={6} fill={`color-mix(in srgb,var(--lagoon) ${strength(note.end, now)}%,${ground})`} />
+        <Rect
+          x={-long / 2}
+          y={-6}
+          width={long}
+          height={12}
+          rx={6}
+          fill={`color-mix(in srgb,var(--lagoon) ${strength(note.end, now)}%,${ground})`}
+        />
       </G>
-      {sung.length > 1 && <Path d={`M${sung.join("L")}`} fill="none" stroke={ground} strokeWidth={1.25} strokeOpacity={0.85} strokeLinejoin="round" />}
+      {sung.length > 1 && (
+        <Path
+          d={`M${sung.join("L")}`}
+          fill="none"
+          stroke={ground}
+          strokeWidth={1.25}
+          strokeOpacity={0.85}
+          strokeLinejoin="round"
+        />
+      )}
     </G>
   );
 }
@@ -135,14 +219,23 @@ function glidePath(x1: number, y1: number, x2: number, y2: number): string {
 }
 
 function trailWords(sounding: TrailNote | null): string {
-  const now = sounding === null ? "Nothing is sounding now." : `Now: ${glyphs(noteName(sounding.line))}, ${offsetWords(sounding.cents)}.`;
+  const now =
+    sounding === null
+      ? "Nothing is sounding now."
+      : `Now: ${glyphs(noteName(sounding.line))}, ${offsetWords(sounding.cents)}.`;
   return `The last ${trailSeconds} seconds of pitch against note lines. ${now} A bar that leans down is flat, one that leans up is sharp.`;
 }
 
 /** What the lean of a bar means. */
 export function TrailLegend() {
   return (
-    <Svg width={62} height={34} viewBox="-2 0 62 34" role="img" aria-label="A bar leaning down is flat, leaning up is sharp">
+    <Svg
+      width={62}
+      height={34}
+      viewBox="-2 0 62 34"
+      role="img"
+      aria-label="A bar leaning down is flat, leaning up is sharp"
+    >
       <Rect x={2} y={5} width={22} height={9} rx={4.5} fill={colors.lagoon} transform="rotate(12 13 9.5)" />
       <Rect x={30} y={5} width={22} height={9} rx={4.5} fill={colors.lagoon} transform="rotate(-12 41 9.5)" />
       <SvgLabel x={11} y={31} size={12} anchor="middle">

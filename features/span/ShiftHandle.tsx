@@ -17,7 +17,14 @@ export interface LadderShift {
 
 /** The shift that a key leads to; null where the key means nothing here. */
 export function shiftForKey(key: string, shift: Pick<LadderShift, "value" | "min" | "max">): number | null {
-  const steps: Record<string, number> = { ArrowUp: 1, ArrowRight: 1, ArrowDown: -1, ArrowLeft: -1, PageUp: 12, PageDown: -12 };
+  const steps: Record<string, number> = {
+    ArrowUp: 1,
+    ArrowRight: 1,
+    ArrowDown: -1,
+    ArrowLeft: -1,
+    PageUp: 12,
+    PageDown: -12,
+  };
   if (key === "Home") return shift.min;
   if (key === "End") return shift.max;
   const step = steps[key];
@@ -46,7 +53,17 @@ interface PointerLike {
 }
 
 /** The handle of the ladder, 48 wide and 112 high: drags the song by whole semitones, arrow keys do the same. */
-export function ShiftHandle({ shift, step, top, right }: { shift: LadderShift; step: number; top: number; right: number }) {
+export function ShiftHandle({
+  shift,
+  step,
+  top,
+  right,
+}: {
+  shift: LadderShift;
+  step: number;
+  top: number;
+  right: number;
+}) {
   const grip = useRef<{ y: number; value: number } | null>(null);
   const set = (next: number | null) => {
     if (next !== null && next !== shift.value) shift.onChange(next);
@@ -83,7 +100,20 @@ export function ShiftHandle({ shift, step, top, right }: { shift: LadderShift; s
         },
       })}
       style={[
-        { position: "absolute", top, right, width: 48, height: 112, borderRadius: 24, borderWidth: 1.5, borderColor: colors.plum, backgroundColor: colors.card, alignItems: "center", justifyContent: "space-between", paddingVertical: 14 },
+        {
+          position: "absolute",
+          top,
+          right,
+          width: 48,
+          height: 112,
+          borderRadius: 24,
+          borderWidth: 1.5,
+          borderColor: colors.plum,
+          backgroundColor: colors.card,
+          alignItems: "center",
+          justifyContent: "space-between",
+          paddingVertical: 14,
+        },
         webStyle({ cursor: "grab", touchAction: "none", userSelect: "none" }),
       ]}
     >

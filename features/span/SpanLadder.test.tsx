@@ -8,7 +8,12 @@ import { SpanLadder } from "./SpanLadder";
 import { stripX, VoiceStrip } from "./VoiceStrip";
 
 const voice: SingingVoice = { range: { lowMidi: 53, highMidi: 72 }, comfort: { lowMidi: 55, highMidi: 69 } };
-const marks: KeyMark[] = [60, 70, 74].map((midi, index) => ({ midi, share: [0.6, 0.3, 0.1][index] ?? 0, zone: zoneOf(midi, voice), home: index === 0 }));
+const marks: KeyMark[] = [60, 70, 74].map((midi, index) => ({
+  midi,
+  share: [0.6, 0.3, 0.1][index] ?? 0,
+  zone: zoneOf(midi, voice),
+  home: index === 0,
+}));
 
 describe("SpanLadder", () => {
   it("is one picture with its words", () => {
@@ -39,7 +44,15 @@ describe("SpanLadder", () => {
 
   it("moves the song by the arrow keys, one semitone each, within its limits", () => {
     const onChange = jest.fn();
-    render(<SpanLadder voice={voice} marks={marks} step={15} width={300} shift={{ value: 3, min: -11, max: 4, name: "F", onChange }} />);
+    render(
+      <SpanLadder
+        voice={voice}
+        marks={marks}
+        step={15}
+        width={300}
+        shift={{ value: 3, min: -11, max: 4, name: "F", onChange }}
+      />,
+    );
     const handle = screen.getByRole("slider", { name: "Move the song" });
     expect(handle.getAttribute("aria-valuetext")).toBe("F, 3 up");
     fireEvent.keyDown(handle, { key: "ArrowUp" });
@@ -82,7 +95,9 @@ describe("VoiceStrip", () => {
   });
 
   it("says what it shows", () => {
-    render(<VoiceStrip voice={voice} marks={marks} scale={{ low: 49, high: 78 }} summary="In C: all of it sits well." />);
+    render(
+      <VoiceStrip voice={voice} marks={marks} scale={{ low: 49, high: 78 }} summary="In C: all of it sits well." />,
+    );
     expect(screen.getByRole("img", { name: "In C: all of it sits well." })).toBeTruthy();
   });
 });
@@ -105,7 +120,9 @@ describe("KeySpan", () => {
   });
 
   it("names both ends, and marks the one beyond with a triangle", () => {
-    const { container } = render(<KeySpan voice={voice} marks={marks} scale={{ low: 48, high: 78 }} spelling="flats" />);
+    const { container } = render(
+      <KeySpan voice={voice} marks={marks} scale={{ low: 48, high: 78 }} spelling="flats" />,
+    );
     expect(Array.from(container.querySelectorAll("text")).map((text) => text.textContent)).toEqual(["C4", "D5 ▲"]);
   });
 });

@@ -6,13 +6,22 @@ import { SvgLabel } from "@/features/ui/SvgLabel";
 import { colors, mixtures } from "@/features/ui/theme";
 import { ground, Hatch, useDrawingId } from "./Hatch";
 import { LadderColumn } from "./LadderColumn";
-import { isNatural, ladderMeasures, ladderScale, ladderWords, lengthPerPercent, yOf, type LadderStep, type Scale } from "./ladderGeometry";
+import {
+  isNatural,
+  ladderMeasures,
+  ladderScale,
+  ladderWords,
+  lengthPerPercent,
+  yOf,
+  type LadderStep,
+  type Scale,
+} from "./ladderGeometry";
 import { LadderLabels, type LadderLabel } from "./LadderLabels";
 import { LadderMarks } from "./LadderMarks";
 import { ShiftHandle, type LadderShift } from "./ShiftHandle";
 
 /** Two lines over one side of a two-sided ladder. */
-export interface LadderHead {
+interface LadderHead {
   title: string;
   text: string;
   tone: "comfort" | "beyond";
@@ -51,7 +60,23 @@ const labelRoom = 150;
 const headRoom = 46;
 
 /** The span: a vertical pitch ladder whose column is the voice and whose marks are the song. */
-export function SpanLadder({ voice, marks = [], leftMarks, heads, step, width, scale, labels, bracket, note, columnWords, shift, spelling = "sharps", summary, testID }: SpanLadderProps) {
+export function SpanLadder({
+  voice,
+  marks = [],
+  leftMarks,
+  heads,
+  step,
+  width,
+  scale,
+  labels,
+  bracket,
+  note,
+  columnWords,
+  shift,
+  spelling = "sharps",
+  summary,
+  testID,
+}: SpanLadderProps) {
   const id = useDrawingId();
   const measure = ladderMeasures[step];
   const shown = scale ?? ladderScale(voice, [...marks, ...(leftMarks ?? [])], step === 12 ? 0 : 1);
@@ -59,7 +84,9 @@ export function SpanLadder({ voice, marks = [], leftMarks, heads, step, width, s
   const height = pad + (shown.high - shown.low) * step + step / 2 + (step === 12 ? 2 : 0);
   const y = (midi: number) => yOf(midi, shown, step, pad);
   const rungEnd = labels ? width - labelRoom : width;
-  const columnX = leftMarks ? Math.round(measure.rungs + (width - measure.rungs - measure.column) * 0.464) : measure.columnX;
+  const columnX = leftMarks
+    ? Math.round(measure.rungs + (width - measure.rungs - measure.column) * 0.464)
+    : measure.columnX;
   const marksX = columnX + measure.column + measure.gap;
   const leftX = columnX - measure.gap;
   const shiftRoom = shift ? 56 : 0;
@@ -92,20 +119,44 @@ export function SpanLadder({ voice, marks = [], leftMarks, heads, step, width, s
                 strokeWidth={1}
               />
               {natural && (
-                <SvgLabel x={measure.names} y={y(midi) + measure.font * 0.35} size={measure.font} family="display" weight="600" anchor="end" fill={middleC ? colors.ink : colors.inkSoft}>
+                <SvgLabel
+                  x={measure.names}
+                  y={y(midi) + measure.font * 0.35}
+                  size={measure.font}
+                  family="display"
+                  weight="600"
+                  anchor="end"
+                  fill={middleC ? colors.ink : colors.inkSoft}
+                >
                   {`${"C D EF G A B"[midi % 12]}${Math.floor(midi / 12) - 1}`}
                 </SvgLabel>
               )}
             </G>
           );
         })}
-        {leftMarks && <Rect x={columnX - measure.ground} y={y(shown.high) - step / 2} width={measure.column + 2 * measure.ground} height={height} fill={ground} />}
-        {voice && <LadderColumn id={id} voice={voice} scale={shown} step={step} pad={pad} x={columnX} words={columnWords} />}
+        {leftMarks && (
+          <Rect
+            x={columnX - measure.ground}
+            y={y(shown.high) - step / 2}
+            width={measure.column + 2 * measure.ground}
+            height={height}
+            fill={ground}
+          />
+        )}
+        {voice && (
+          <LadderColumn id={id} voice={voice} scale={shown} step={step} pad={pad} x={columnX} words={columnWords} />
+        )}
         {leftMarks && <LadderMarks {...side} marks={leftMarks} x={leftX} direction={-1} />}
         <LadderMarks {...side} marks={marks} x={marksX} direction={1} />
         {note !== undefined && (
           <G>
-            <Rect x={columnX + measure.column + 4} y={y(shown.high) - 8} width={Math.min(width - marksX, note.length * 6.2 + 8)} height={16} fill={ground} />
+            <Rect
+              x={columnX + measure.column + 4}
+              y={y(shown.high) - 8}
+              width={Math.min(width - marksX, note.length * 6.2 + 8)}
+              height={16}
+              fill={ground}
+            />
             <SvgLabel x={marksX} y={y(shown.high) + 4} size={12}>
               {note}
             </SvgLabel>
@@ -119,18 +170,37 @@ export function SpanLadder({ voice, marks = [], leftMarks, heads, step, width, s
           </G>
         )}
       </Svg>
-      {shift && <ShiftHandle shift={shift} step={step} right={8} top={Math.min(height - 112, Math.max(0, y(home) - 56))} />}
+      {shift && (
+        <ShiftHandle shift={shift} step={step} right={8} top={Math.min(height - 112, Math.max(0, y(home) - 56))} />
+      )}
     </View>
   );
 }
 
-function LadderHeadWords({ head, x, anchor, size }: { head: LadderHead; x: number; anchor: "start" | "end"; size: number }) {
+function LadderHeadWords({
+  head,
+  x,
+  anchor,
+  size,
+}: {
+  head: LadderHead;
+  x: number;
+  anchor: "start" | "end";
+  size: number;
+}) {
   return (
     <G>
       <SvgLabel x={x} y={14} size={size} weight="500" anchor={anchor} fill={colors.ink}>
         {head.title}
       </SvgLabel>
-      <SvgLabel x={x} y={33} size={size} weight="500" anchor={anchor} fill={head.tone === "comfort" ? colors.lagoon : colors.brick}>
+      <SvgLabel
+        x={x}
+        y={33}
+        size={size}
+        weight="500"
+        anchor={anchor}
+        fill={head.tone === "comfort" ? colors.lagoon : colors.brick}
+      >
         {head.text}
       </SvgLabel>
     </G>

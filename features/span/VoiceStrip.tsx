@@ -33,9 +33,17 @@ export function VoiceStrip({ voice, marks, scale, width = 120, spelling = "sharp
   const softRight = x(voice.comfort.highMidi) + half;
   const longest = Math.max(0.01, ...marks.map((mark) => mark.share));
   const thick = Math.min(3.2, half * 1.4);
-  const octaves = [...Array(scale.high - scale.low + 1).keys()].map((index) => scale.low + index).filter((midi) => midi % 12 === 0);
+  const octaves = [...Array(scale.high - scale.low + 1).keys()]
+    .map((index) => scale.low + index)
+    .filter((midi) => midi % 12 === 0);
   return (
-    <Svg width={width} height={26} viewBox={`0 0 ${width} 26`} role="img" aria-label={summary ?? ladderWords(voice, marks, spelling)}>
+    <Svg
+      width={width}
+      height={26}
+      viewBox={`0 0 ${width} 26`}
+      role="img"
+      aria-label={summary ?? ladderWords(voice, marks, spelling)}
+    >
       <Hatch id={`${id}s`} pitch={4} line={1.6} />
       {octaves.map((midi) => (
         <Line key={midi} x1={x(midi)} x2={x(midi)} y1={0} y2={26} stroke={mixtures.rungC} strokeWidth={1} />
@@ -53,16 +61,45 @@ export function VoiceStrip({ voice, marks, scale, width = 120, spelling = "sharp
       {marks.map((mark) => {
         const long = 4 + (8.8 * mark.share) / longest;
         const at = x(mark.midi);
-        if (mark.zone === "comfort") return <Rect key={mark.midi} x={at - thick / 2} y={12.5} width={thick} height={long} rx={1} fill={colors.ink} />;
+        if (mark.zone === "comfort")
+          return (
+            <Rect key={mark.midi} x={at - thick / 2} y={12.5} width={thick} height={long} rx={1} fill={colors.ink} />
+          );
         if (mark.zone === "reach") {
-          return <Rect key={mark.midi} x={at - 1.5} y={13} width={3} height={long - 1} rx={1} fill={ground} stroke={colors.honey} strokeWidth={1.25} />;
+          return (
+            <Rect
+              key={mark.midi}
+              x={at - 1.5}
+              y={13}
+              width={3}
+              height={long - 1}
+              rx={1}
+              fill={ground}
+              stroke={colors.honey}
+              strokeWidth={1.25}
+            />
+          );
         }
         const up = sideOf(mark.midi, voice) === "above";
         const away = up ? 7 : -7;
         return (
           <G key={mark.midi}>
-            <Rect x={at - 1.5} y={13} width={3} height={long - 1} rx={1} fill="none" stroke={colors.brick} strokeWidth={1.2} strokeDasharray="0.1 2.1" strokeLinecap="round" />
-            <Path d={up ? `M${at + away - 3.5} 19.8h7l-3.5-5.6z` : `M${at + away - 3.5} 14.2h7l-3.5 5.6z`} fill={colors.brick} />
+            <Rect
+              x={at - 1.5}
+              y={13}
+              width={3}
+              height={long - 1}
+              rx={1}
+              fill="none"
+              stroke={colors.brick}
+              strokeWidth={1.2}
+              strokeDasharray="0.1 2.1"
+              strokeLinecap="round"
+            />
+            <Path
+              d={up ? `M${at + away - 3.5} 19.8h7l-3.5-5.6z` : `M${at + away - 3.5} 14.2h7l-3.5 5.6z`}
+              fill={colors.brick}
+            />
           </G>
         );
       })}
@@ -87,7 +124,9 @@ export function VoiceStripHeader({ voice, scale, width = 120 }: Pick<VoiceStripP
 function stripNames(voice: SingingVoice, scale: Scale, width: number): { midi: number; name: string; x: number }[] {
   const low = Math.round(voice.comfort.lowMidi);
   const high = Math.round(voice.comfort.highMidi);
-  const between = [...Array(Math.max(0, high - low)).keys()].map((index) => low + index).filter((midi) => midi % 12 === 0);
+  const between = [...Array(Math.max(0, high - low)).keys()]
+    .map((index) => low + index)
+    .filter((midi) => midi % 12 === 0);
   const out: { midi: number; name: string; x: number }[] = [];
   for (const midi of [low, high, ...between]) {
     const x = stripX(midi, scale, width);

@@ -1,5 +1,16 @@
 import type { KeyMark, SingingVoice } from "@/shared/keys/keyScore";
-import { commonScale, isNatural, ladderScale, ladderWords, lengthPerPercent, markLength, sideOf, spread, yOf, zoneOf } from "./ladderGeometry";
+import {
+  commonScale,
+  isNatural,
+  ladderScale,
+  ladderWords,
+  lengthPerPercent,
+  markLength,
+  sideOf,
+  spread,
+  yOf,
+  zoneOf,
+} from "./ladderGeometry";
 
 const voice: SingingVoice = { range: { lowMidi: 53, highMidi: 72 }, comfort: { lowMidi: 55, highMidi: 69 } };
 const mark = (midi: number, share: number, home = false): KeyMark => ({ midi, share, zone: zoneOf(midi, voice), home });

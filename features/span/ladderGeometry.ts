@@ -6,9 +6,48 @@ export type LadderStep = 18 | 15 | 12;
 
 /** What goes with each step: column, its end radius, place of names and rungs, height of marks, room round the column. */
 export const ladderMeasures = {
-  18: { column: 64, radius: 14, names: 26, rungs: 34, columnX: 44, mark: 8, gap: 8, ground: 4, font: 13, tick: 8, noteGap: 2.5, perPercent: 5.2 },
-  15: { column: 52, radius: 14, names: 24, rungs: 32, columnX: 42, mark: 9, gap: 8, ground: 5, font: 13, tick: 8, noteGap: 2.5, perPercent: 3.7 },
-  12: { column: 44, radius: 11, names: 22, rungs: 29, columnX: 38, mark: 8, gap: 6, ground: 3, font: 12, tick: 6, noteGap: 2, perPercent: 3.2 },
+  18: {
+    column: 64,
+    radius: 14,
+    names: 26,
+    rungs: 34,
+    columnX: 44,
+    mark: 8,
+    gap: 8,
+    ground: 4,
+    font: 13,
+    tick: 8,
+    noteGap: 2.5,
+    perPercent: 5.2,
+  },
+  15: {
+    column: 52,
+    radius: 14,
+    names: 24,
+    rungs: 32,
+    columnX: 42,
+    mark: 9,
+    gap: 8,
+    ground: 5,
+    font: 13,
+    tick: 8,
+    noteGap: 2.5,
+    perPercent: 3.7,
+  },
+  12: {
+    column: 44,
+    radius: 11,
+    names: 22,
+    rungs: 29,
+    columnX: 38,
+    mark: 8,
+    gap: 6,
+    ground: 3,
+    font: 12,
+    tick: 6,
+    noteGap: 2,
+    perPercent: 3.2,
+  },
 } as const;
 
 const naturals = new Set([0, 2, 4, 5, 7, 9, 11]);
@@ -26,7 +65,10 @@ export interface Scale {
 
 /** The semitones that a ladder must show: voice and marks with a rung of air, ending on naturals. */
 export function ladderScale(voice: SingingVoice | null, marks: readonly Pick<KeyMark, "midi">[], air: number): Scale {
-  const ends = [...(voice ? [Math.round(voice.range.lowMidi), Math.round(voice.range.highMidi)] : []), ...marks.map((mark) => mark.midi)];
+  const ends = [
+    ...(voice ? [Math.round(voice.range.lowMidi), Math.round(voice.range.highMidi)] : []),
+    ...marks.map((mark) => mark.midi),
+  ];
   if (ends.length === 0) return { low: 52, high: 74 };
   let low = Math.min(...ends) - air;
   let high = Math.max(...ends) + air;
@@ -42,7 +84,8 @@ export function yOf(midi: number, scale: Scale, step: number, pad: number): numb
 
 /** Where a pitch lies in a voice. Pitches are compared by the nearest semitone, as they are sung and drawn. */
 export function zoneOf(midi: number, voice: SingingVoice): KeyMark["zone"] {
-  const inside = (band: { lowMidi: number; highMidi: number }) => midi >= Math.round(band.lowMidi) && midi <= Math.round(band.highMidi);
+  const inside = (band: { lowMidi: number; highMidi: number }) =>
+    midi >= Math.round(band.lowMidi) && midi <= Math.round(band.highMidi);
   if (inside(voice.comfort)) return "comfort";
   return inside(voice.range) ? "reach" : "beyond";
 }
@@ -79,12 +122,18 @@ function percent(marks: readonly KeyMark[], zone: KeyMark["zone"]): number {
 }
 
 function beyondWords(marks: readonly KeyMark[], voice: SingingVoice, spelling: Spelling): string {
-  const names = marks.filter((mark) => mark.zone === "beyond").map((mark) => `${say(mark.midi, spelling)} ${sideOf(mark.midi, voice)} your range`);
+  const names = marks
+    .filter((mark) => mark.zone === "beyond")
+    .map((mark) => `${say(mark.midi, spelling)} ${sideOf(mark.midi, voice)} your range`);
   return names.length === 0 ? "" : ` Beyond: ${names.join(", ")}.`;
 }
 
 /** The whole picture in words, for those who do not see it. */
-export function ladderWords(voice: SingingVoice | null, marks: readonly KeyMark[], spelling: Spelling = "sharps"): string {
+export function ladderWords(
+  voice: SingingVoice | null,
+  marks: readonly KeyMark[],
+  spelling: Spelling = "sharps",
+): string {
   const parts: string[] = [];
   if (voice) {
     parts.push(`Voice from ${say(voice.range.lowMidi, spelling)} to ${say(voice.range.highMidi, spelling)}.`);
@@ -94,7 +143,9 @@ export function ladderWords(voice: SingingVoice | null, marks: readonly KeyMark[
     const pitches = marks.map((mark) => mark.midi);
     parts.push(`Notes from ${say(Math.min(...pitches), spelling)} to ${say(Math.max(...pitches), spelling)}.`);
     if (voice) {
-      parts.push(`${percent(marks, "comfort")} % of the time in comfort, ${percent(marks, "reach")} % in reach, ${percent(marks, "beyond")} % beyond.${beyondWords(marks, voice, spelling)}`);
+      parts.push(
+        `${percent(marks, "comfort")} % of the time in comfort, ${percent(marks, "reach")} % in reach, ${percent(marks, "beyond")} % beyond.${beyondWords(marks, voice, spelling)}`,
+      );
     }
   }
   return parts.join(" ");
@@ -108,7 +159,8 @@ export function spread(places: readonly number[], distance: number): number[] {
     if (over > 0) {
       out[i - 1] = (out[i - 1] ?? 0) - over / 2;
       out[i] = (out[i] ?? 0) + over / 2;
-      for (let k = i - 1; k > 0 && (out[k] ?? 0) - (out[k - 1] ?? 0) < distance; k -= 1) out[k - 1] = (out[k] ?? 0) - distance;
+      for (let k = i - 1; k > 0 && (out[k] ?? 0) - (out[k - 1] ?? 0) < distance; k -= 1)
+        out[k - 1] = (out[k] ?? 0) - distance;
     }
   }
   return out;

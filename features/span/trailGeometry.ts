@@ -27,7 +27,11 @@ const gapS = 0.08;
 
 /** The sounding frames of the last seconds, as pitches. */
 export function trailPoints(frames: readonly LiveFrame[], now: number): TrailPoint[] {
-  return frames.flatMap((frame) => (frame.hz !== null && frame.t > now - trailSeconds && frame.t <= now ? [{ t: frame.t, midi: hzToMidi(frame.hz) }] : []));
+  return frames.flatMap((frame) =>
+    frame.hz !== null && frame.t > now - trailSeconds && frame.t <= now
+      ? [{ t: frame.t, midi: hzToMidi(frame.hz) }]
+      : [],
+  );
 }
 
 /** Slides a window of five over the points, so that a single stray frame moves nothing. */
@@ -86,7 +90,10 @@ export function offsetWords(cents: number): string {
 }
 
 /** Lines shown: round what was sung, an octave and a third at least, moving only when the singing nears an edge. */
-export function trailScale(points: readonly TrailPoint[], before: { low: number; high: number } | null): { low: number; high: number } {
+export function trailScale(
+  points: readonly TrailPoint[],
+  before: { low: number; high: number } | null,
+): { low: number; high: number } {
   const scale = before ?? { low: 57, high: 72 };
   if (points.length === 0) return scale;
   let low = Infinity;
@@ -96,7 +103,8 @@ export function trailScale(points: readonly TrailPoint[], before: { low: number;
     high = Math.max(high, point.midi);
   }
   const span = Math.max(15, Math.ceil(high - low) + 4);
-  if (before && low >= before.low + 0.5 && high <= before.high - 0.5 && before.high - before.low <= span + 6) return before;
+  if (before && low >= before.low + 0.5 && high <= before.high - 0.5 && before.high - before.low <= span + 6)
+    return before;
   const middle = Math.round((low + high) / 2);
   return { low: middle - Math.ceil(span / 2), high: middle - Math.ceil(span / 2) + span };
 }

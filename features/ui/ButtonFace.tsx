@@ -46,7 +46,11 @@ export function ButtonFace({ label, kind = "primary", icon, busy, disabled }: Bu
   const color = { soft: colors.inkSoft, onPlum: colors.onPlum, plum: colors.plum }[tone];
   return (
     <View style={{ flexDirection: "row", alignItems: "center", justifyContent: "center", gap: 10, flexShrink: 1 }}>
-      {busy ? <ActivityIndicator size={20} color={color} aria-hidden /> : icon ? <Icon name={icon} size={24} color={color} /> : null}
+      {busy ? (
+        <ActivityIndicator size={20} color={color} aria-hidden />
+      ) : icon ? (
+        <Icon name={icon} size={24} color={color} />
+      ) : null}
       <Text variant="strong" tone={tone} style={{ lineHeight: 20, textAlign: "center", flexShrink: 1 }}>
         {label}
       </Text>

@@ -30,14 +30,25 @@ export function Chip({ label, selected = false, onPress, mono = false, testID }:
       }}
     >
       {selected && <Icon name="check" size={16} color={colors.onPlum} />}
-      <Text variant={mono ? "monoBold" : "label"} tone={selected ? "onPlum" : "ink"} style={{ fontSize: 14, lineHeight: 18 }} numberOfLines={1}>
+      <Text
+        variant={mono ? "monoBold" : "label"}
+        tone={selected ? "onPlum" : "ink"}
+        style={{ fontSize: 14, lineHeight: 18 }}
+        numberOfLines={1}
+      >
         {label}
       </Text>
     </View>
   );
   if (!onPress) return face;
   return (
-    <Pressable role="button" onPress={onPress} testID={testID} {...webProps({ "aria-pressed": selected })} style={{ minHeight: 48, justifyContent: "center" }}>
+    <Pressable
+      role="button"
+      onPress={onPress}
+      testID={testID}
+      {...webProps({ "aria-pressed": selected })}
+      style={{ minHeight: 48, justifyContent: "center" }}
+    >
       {face}
     </Pressable>
   );

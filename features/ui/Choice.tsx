@@ -17,7 +17,14 @@ export interface ChoiceProps<Value extends string> {
 }
 
 /** A radio group, one option under the other. */
-export function Choice<Value extends string>({ label, options, value, onChange, hideLabel = false, testID }: ChoiceProps<Value>) {
+export function Choice<Value extends string>({
+  label,
+  options,
+  value,
+  onChange,
+  hideLabel = false,
+  testID,
+}: ChoiceProps<Value>) {
   const labelId = useId();
   const keys = useRadioKeys(
     options.map((option) => option.value),
@@ -25,7 +32,12 @@ export function Choice<Value extends string>({ label, options, value, onChange, 
     onChange,
   );
   return (
-    <View role="radiogroup" testID={testID} {...(hideLabel ? { "aria-label": label } : { "aria-labelledby": labelId })} style={{ gap: 8 }}>
+    <View
+      role="radiogroup"
+      testID={testID}
+      {...(hideLabel ? { "aria-label": label } : { "aria-labelledby": labelId })}
+      style={{ gap: 8 }}
+    >
       {!hideLabel && (
         <Text variant="label" nativeID={labelId} style={{ fontWeight: "600", lineHeight: 18 }}>
           {label}

@@ -29,28 +29,53 @@ describe("places on the grid", () => {
   });
 
   it("are mirrored for left hands", () => {
-    for (const index of [0, 1, 2, 3]) expect(stringX(index, 4, pieceMeasure, true)).toBe(stringX(3 - index, 4, pieceMeasure, false));
+    for (const index of [0, 1, 2, 3])
+      expect(stringX(index, 4, pieceMeasure, true)).toBe(stringX(3 - index, 4, pieceMeasure, false));
   });
 });
 
 describe("ChordGrid", () => {
   it("says each string, the capo and what sounds", () => {
-    render(<ChordGrid name="A" shape={shape([4, 0, null], [3, 0, 0], [1])} strings={3} capo={3} sounds="C" stringNames={["A3", "D4", "F#4"]} />);
-    expect(screen.getByRole("img", { name: "A: A string fret 4, finger 3; D string open; F♯ string silent; capo at fret 3, frets counted from it; sounds C" })).toBeTruthy();
+    render(
+      <ChordGrid
+        name="A"
+        shape={shape([4, 0, null], [3, 0, 0], [1])}
+        strings={3}
+        capo={3}
+        sounds="C"
+        stringNames={["A3", "D4", "F#4"]}
+      />,
+    );
+    expect(
+      screen.getByRole("img", {
+        name: "A: A string fret 4, finger 3; D string open; F♯ string silent; capo at fret 3, frets counted from it; sounds C",
+      }),
+    ).toBeTruthy();
   });
 
   it("fills roots plum, rings open strings and strokes silent ones", () => {
     const { container } = render(<ChordGrid name="D" shape={shape([null, 0, 2], [0, 0, 1], [1, 2])} strings={3} />);
-    const rings = Array.from(container.querySelectorAll("circle")).filter((circle) => circle.getAttribute("fill") === "none");
+    const rings = Array.from(container.querySelectorAll("circle")).filter(
+      (circle) => circle.getAttribute("fill") === "none",
+    );
     expect(rings).toHaveLength(1);
     expect(rings[0]?.getAttribute("stroke")).toBe("var(--plum)");
-    const dots = Array.from(container.querySelectorAll("circle")).filter((circle) => circle.getAttribute("fill") === "var(--plum)");
+    const dots = Array.from(container.querySelectorAll("circle")).filter(
+      (circle) => circle.getAttribute("fill") === "var(--plum)",
+    );
     expect(dots).toHaveLength(1);
     expect(container.querySelectorAll('line[y1="7"]')).toHaveLength(1);
   });
 
   it("draws a barre over all its strings", () => {
-    const { container } = render(<ChordGrid name="F" shape={shape([3, 3, 3], [1, 1, 1], [1], { fret: 3, fromString: 0, toString: 2 })} strings={3} measure={pieceMeasure} />);
+    const { container } = render(
+      <ChordGrid
+        name="F"
+        shape={shape([3, 3, 3], [1, 1, 1], [1], { fret: 3, fromString: 0, toString: 2 })}
+        strings={3}
+        measure={pieceMeasure}
+      />,
+    );
     const bar = container.querySelector("rect");
     expect(Number(bar?.getAttribute("width"))).toBeCloseTo(2 * 17 + 2 * 7.6, 6);
   });

@@ -2,7 +2,15 @@ import { View } from "react-native";
 import Svg, { Circle, G, Line, Rect } from "react-native-svg";
 import { glyphs } from "@/shared/music/pitch";
 import type { Shape } from "@/shared/ways/way";
-import { cardMeasure, fretY, gridWindow, pieceMeasure, spokenGrid, stringX, type GridMeasure } from "./chordGridGeometry";
+import {
+  cardMeasure,
+  fretY,
+  gridWindow,
+  pieceMeasure,
+  spokenGrid,
+  stringX,
+  type GridMeasure,
+} from "./chordGridGeometry";
 import { SvgLabel } from "./SvgLabel";
 import { Text } from "./Text";
 import { colors } from "./theme";
@@ -39,7 +47,14 @@ function Dot({ x, y, finger, root, inBarre, radius }: DrawnDot & { radius: numbe
     <G>
       {(root || !inBarre) && <Circle cx={x} cy={y} r={radius} fill={root ? colors.plum : colors.ink} />}
       {finger > 0 && (
-        <SvgLabel x={x} y={y + radius / 2} size={radius * 1.48} weight="600" anchor="middle" fill={root ? colors.onPlum : colors.paper}>
+        <SvgLabel
+          x={x}
+          y={y + radius / 2}
+          size={radius * 1.48}
+          weight="600"
+          anchor="middle"
+          fill={root ? colors.onPlum : colors.paper}
+        >
           {String(finger)}
         </SvgLabel>
       )}
@@ -48,7 +63,17 @@ function Dot({ x, y, finger, root, inBarre, radius }: DrawnDot & { radius: numbe
 }
 
 /** The neck from the front, drawn after the bass side at the left; left-handed grids are mirrored. */
-export function ChordGrid({ name, shape, strings, capo = 0, sounds, leftHanded = false, stringNames, measure, testID }: ChordGridProps) {
+export function ChordGrid({
+  name,
+  shape,
+  strings,
+  capo = 0,
+  sounds,
+  leftHanded = false,
+  stringNames,
+  measure,
+  testID,
+}: ChordGridProps) {
   const layout = useLayout();
   const size = measure ?? (layout === "phone" ? cardMeasure : pieceMeasure);
   const window = gridWindow(shape);
@@ -62,25 +87,63 @@ export function ChordGrid({ name, shape, strings, capo = 0, sounds, leftHanded =
   const indices = Array.from({ length: strings }, (_, index) => index);
   const x = (index: number) => stringX(index, strings, size, leftHanded);
   const { barre } = shape;
-  const words = spokenGrid({ name: glyphs(name), shape, capo, sounds: sounds === undefined ? undefined : glyphs(sounds), stringNames: stringNames?.map(glyphs) });
+  const words = spokenGrid({
+    name: glyphs(name),
+    shape,
+    capo,
+    sounds: sounds === undefined ? undefined : glyphs(sounds),
+    stringNames: stringNames?.map(glyphs),
+  });
 
   return (
     <View testID={testID} style={{ alignItems: "center", flexShrink: 0 }}>
       <Text variant="monoBold" aria-hidden style={{ fontSize: 14, lineHeight: 18, paddingLeft: 10 }}>
         {glyphs(name)}
       </Text>
-      <Svg width={right + 10} height={bottom + 3} viewBox={`0 0 ${right + 10} ${bottom + 3}`} role="img" aria-label={words}>
+      <Svg
+        width={right + 10}
+        height={bottom + 3}
+        viewBox={`0 0 ${right + 10} ${bottom + 3}`}
+        role="img"
+        aria-label={words}
+      >
         {Array.from({ length: window.rows + 1 }, (_, row) => row)
           .slice(upTheNeck ? 0 : 1)
           .map((row) => (
-            <Line key={row} x1={left} x2={right} y1={top + row * size.fret} y2={top + row * size.fret} stroke={colors.inkSoft} strokeOpacity={0.55} strokeWidth={1} />
+            <Line
+              key={row}
+              x1={left}
+              x2={right}
+              y1={top + row * size.fret}
+              y2={top + row * size.fret}
+              stroke={colors.inkSoft}
+              strokeOpacity={0.55}
+              strokeWidth={1}
+            />
           ))}
         {indices.map((index) => (
-          <Line key={index} x1={x(index)} x2={x(index)} y1={top} y2={bottom} stroke={colors.inkSoft} strokeWidth={1.25} />
+          <Line
+            key={index}
+            x1={x(index)}
+            x2={x(index)}
+            y1={top}
+            y2={bottom}
+            stroke={colors.inkSoft}
+            strokeWidth={1.25}
+          />
         ))}
         {top > nut &&
           indices.map((index) => (
-            <Line key={index} x1={x(index)} x2={x(index)} y1={nut + 5} y2={top} stroke={colors.inkSoft} strokeWidth={1.25} strokeDasharray="2 2.5" />
+            <Line
+              key={index}
+              x1={x(index)}
+              x2={x(index)}
+              y1={nut + 5}
+              y2={top}
+              stroke={colors.inkSoft}
+              strokeWidth={1.25}
+              strokeDasharray="2 2.5"
+            />
           ))}
         {capo > 0 ? (
           <G>
@@ -90,10 +153,28 @@ export function ChordGrid({ name, shape, strings, capo = 0, sounds, leftHanded =
             </SvgLabel>
           </G>
         ) : (
-          !upTheNeck && <Line x1={left - 0.5} x2={right + 0.5} y1={nut - 0.5} y2={nut - 0.5} stroke={colors.ink} strokeWidth={3} strokeLinecap="round" />
+          !upTheNeck && (
+            <Line
+              x1={left - 0.5}
+              x2={right + 0.5}
+              y1={nut - 0.5}
+              y2={nut - 0.5}
+              stroke={colors.ink}
+              strokeWidth={3}
+              strokeLinecap="round"
+            />
+          )
         )}
         {upTheNeck && (
-          <SvgLabel x={10} y={fretY(window.first, window, top, size) + 4} size={12} family="display" weight="600" anchor="end" fill={colors.ink}>
+          <SvgLabel
+            x={10}
+            y={fretY(window.first, window, top, size) + 4}
+            size={12}
+            family="display"
+            weight="600"
+            anchor="end"
+            fill={colors.ink}
+          >
             {String(window.first)}
           </SvgLabel>
         )}
@@ -111,13 +192,48 @@ export function ChordGrid({ name, shape, strings, capo = 0, sounds, leftHanded =
           const fret = shape.frets[index];
           const root = shape.roots.includes(index);
           if (fret === null || fret === undefined) {
-            return <Line key={index} x1={x(index) - 4} x2={x(index) + 4} y1={7} y2={7} stroke={colors.inkSoft} strokeWidth={2} strokeLinecap="round" />;
+            return (
+              <Line
+                key={index}
+                x1={x(index) - 4}
+                x2={x(index) + 4}
+                y1={7}
+                y2={7}
+                stroke={colors.inkSoft}
+                strokeWidth={2}
+                strokeLinecap="round"
+              />
+            );
           }
           if (fret === 0) {
-            return <Circle key={index} cx={x(index)} cy={7} r={4.25} fill="none" stroke={root ? colors.plum : colors.ink} strokeWidth={root ? 2.5 : 1.75} />;
+            return (
+              <Circle
+                key={index}
+                cx={x(index)}
+                cy={7}
+                r={4.25}
+                fill="none"
+                stroke={root ? colors.plum : colors.ink}
+                strokeWidth={root ? 2.5 : 1.75}
+              />
+            );
           }
-          const inBarre = barre !== null && fret === barre.fret && index >= Math.min(barre.fromString, barre.toString) && index <= Math.max(barre.fromString, barre.toString);
-          return <Dot key={index} x={x(index)} y={fretY(fret, window, top, size)} finger={shape.fingers[index] ?? 0} root={root} inBarre={inBarre} radius={radius} />;
+          const inBarre =
+            barre !== null &&
+            fret === barre.fret &&
+            index >= Math.min(barre.fromString, barre.toString) &&
+            index <= Math.max(barre.fromString, barre.toString);
+          return (
+            <Dot
+              key={index}
+              x={x(index)}
+              y={fretY(fret, window, top, size)}
+              finger={shape.fingers[index] ?? 0}
+              root={root}
+              inBarre={inBarre}
+              radius={radius}
+            />
+          );
         })}
       </Svg>
       {sounds !== undefined && (

@@ -103,7 +103,9 @@ describe("Field", () => {
     render(<Field label="Highest note" value="X4" error="There is no X4. Try A4." onChangeText={() => undefined} />);
     const field = screen.getByLabelText("Highest note");
     expect(field.getAttribute("aria-invalid")).toBe("true");
-    expect(document.getElementById(field.getAttribute("aria-describedby") ?? "")?.textContent).toContain("There is no X4. Try A4.");
+    expect(document.getElementById(field.getAttribute("aria-describedby") ?? "")?.textContent).toContain(
+      "There is no X4. Try A4.",
+    );
   });
 });
 
@@ -135,7 +137,13 @@ describe("LiveText", () => {
 });
 
 describe("QueryState", () => {
-  const query = (over: Partial<QueryLike<string>>): QueryLike<string> => ({ data: undefined, isPending: true, error: null, refetch: () => undefined, ...over });
+  const query = (over: Partial<QueryLike<string>>): QueryLike<string> => ({
+    data: undefined,
+    isPending: true,
+    error: null,
+    refetch: () => undefined,
+    ...over,
+  });
 
   it("shows that it is loading, then what came", () => {
     const { rerender } = render(<QueryState query={query({})}>{(data) => <p>{data}</p>}</QueryState>);
@@ -146,7 +154,11 @@ describe("QueryState", () => {
 
   it("offers another try after a failure", () => {
     const refetch = jest.fn();
-    render(<QueryState query={query({ isPending: false, error: new Error("The shelf did not open."), refetch })}>{() => null}</QueryState>);
+    render(
+      <QueryState query={query({ isPending: false, error: new Error("The shelf did not open."), refetch })}>
+        {() => null}
+      </QueryState>,
+    );
     expect(screen.getByRole("alert").textContent).toContain("The shelf did not open.");
     fireEvent.click(screen.getByRole("button", { name: "Try again" }));
     expect(refetch).toHaveBeenCalledTimes(1);

@@ -26,7 +26,9 @@ export function ErrorState({ title, text, onRetry, retryLabel = "Try again", tes
           </Heading>
         </View>
         <Text variant="body">{text}</Text>
-        {onRetry && <Button kind="secondary" small icon="again" label={retryLabel} onPress={onRetry} style={{ marginTop: 8 }} />}
+        {onRetry && (
+          <Button kind="secondary" small icon="again" label={retryLabel} onPress={onRetry} style={{ marginTop: 8 }} />
+        )}
       </Card>
     </View>
   );

@@ -29,13 +29,32 @@ export interface FieldProps {
 
 const lineHeight = 22;
 
-export function Field({ label, value, onChangeText, onBlur, error, hint, multiline, rows = 8, mono, secure, autoComplete, disabled, testID, ...rest }: FieldProps) {
+export function Field({
+  label,
+  value,
+  onChangeText,
+  onBlur,
+  error,
+  hint,
+  multiline,
+  rows = 8,
+  mono,
+  secure,
+  autoComplete,
+  disabled,
+  testID,
+  ...rest
+}: FieldProps) {
   const id = useId();
   const noteId = `${id}-note`;
   const [focused, setFocused] = useState(false);
   const note = error ?? hint;
   // An address or a password, shown or not, is no prose: no dictionary looks at it.
-  const exact = secure === true || autoComplete === "email" || autoComplete === "new-password" || autoComplete === "current-password";
+  const exact =
+    secure === true ||
+    autoComplete === "email" ||
+    autoComplete === "new-password" ||
+    autoComplete === "current-password";
   return (
     <View style={{ gap: 6 }}>
       <label htmlFor={id} style={{ font: `600 14px/18px ${fonts.text}`, color: colors.ink }}>
@@ -79,11 +98,19 @@ export function Field({ label, value, onChangeText, onBlur, error, hint, multili
             fontSize: 16,
             lineHeight,
           },
-          webStyle({ boxShadow: focused ? "0 0 0 1.5px var(--plum)" : "none", ...(multiline ? { resize: "vertical" } : null), ...(mono ? { whiteSpace: "pre", overflowX: "auto" } : null) }),
+          webStyle({
+            boxShadow: focused ? "0 0 0 1.5px var(--plum)" : "none",
+            ...(multiline ? { resize: "vertical" } : null),
+            ...(mono ? { whiteSpace: "pre", overflowX: "auto" } : null),
+          }),
         ]}
       />
       {note !== undefined && (
-        <View nativeID={noteId} {...(error === undefined ? null : webProps({ "aria-live": "polite" }))} style={{ flexDirection: "row", gap: 5, alignItems: "flex-start" }}>
+        <View
+          nativeID={noteId}
+          {...(error === undefined ? null : webProps({ "aria-live": "polite" }))}
+          style={{ flexDirection: "row", gap: 5, alignItems: "flex-start" }}
+        >
           {error !== undefined && <Icon name="warning" size={16} color={colors.brick} />}
           <Text variant="tiny" tone={error === undefined ? "soft" : "brick"} style={{ flexShrink: 1 }}>
             {note}

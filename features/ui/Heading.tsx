@@ -16,7 +16,10 @@ export interface HeadingProps {
 
 const usual = { 1: 36, 2: 20, 3: 16 } as const;
 
-export const Heading = forwardRef<NativeText, HeadingProps>(function Heading({ level, size = usual[level], focusable, children, style }, ref) {
+export const Heading = forwardRef<NativeText, HeadingProps>(function Heading(
+  { level, size = usual[level], focusable, children, style },
+  ref,
+) {
   return (
     <NativeText
       ref={ref}

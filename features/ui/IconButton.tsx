@@ -16,7 +16,16 @@ export interface IconButtonProps {
   style?: StyleProp<ViewStyle>;
 }
 
-export function IconButton({ icon, label, onPress, pressed, disabled, color = colors.ink, testID, style }: IconButtonProps) {
+export function IconButton({
+  icon,
+  label,
+  onPress,
+  pressed,
+  disabled,
+  color = colors.ink,
+  testID,
+  style,
+}: IconButtonProps) {
   return (
     <Pressable
       role="button"
@@ -26,7 +35,14 @@ export function IconButton({ icon, label, onPress, pressed, disabled, color = co
       testID={testID}
       {...webProps({ "aria-pressed": pressed, title: label })}
       style={[
-        { width: sizes.target, height: sizes.target, alignItems: "center", justifyContent: "center", borderRadius: sizes.radius, opacity: disabled ? 0.5 : 1 },
+        {
+          width: sizes.target,
+          height: sizes.target,
+          alignItems: "center",
+          justifyContent: "center",
+          borderRadius: sizes.radius,
+          opacity: disabled ? 0.5 : 1,
+        },
         style,
       ]}
     >

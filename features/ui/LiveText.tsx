@@ -10,7 +10,7 @@ export interface LiveTextProps extends TextProps {
 }
 
 /** Out of sight, not out of hearing. */
-export const hiddenStyle = webStyle({
+const hiddenStyle = webStyle({
   position: "absolute",
   width: 1,
   height: 1,
@@ -23,7 +23,12 @@ export const hiddenStyle = webStyle({
 /** Words that are spoken when they change: states of the recorder, results. */
 export function LiveText({ urgent = false, hidden = false, children, ...text }: LiveTextProps) {
   return (
-    <View role={urgent ? "alert" : "status"} aria-live={urgent ? "assertive" : "polite"} {...webProps({ "aria-atomic": true })} style={hidden ? hiddenStyle : null}>
+    <View
+      role={urgent ? "alert" : "status"}
+      aria-live={urgent ? "assertive" : "polite"}
+      {...webProps({ "aria-atomic": true })}
+      style={hidden ? hiddenStyle : null}
+    >
       <Text {...text}>{children}</Text>
     </View>
   );

@@ -8,7 +8,10 @@ const oncePerMs = 30_000;
 /** Whether an error says that a part of the program could not be fetched, as after a new version was put in place. */
 export function isMissingChunk(error: unknown): boolean {
   if (!(error instanceof Error)) return false;
-  return error.name === "AsyncRequireError" || /loading (module|chunk|bundle)|dynamically imported module|load split bundle/i.test(error.message);
+  return (
+    error.name === "AsyncRequireError" ||
+    /loading (module|chunk|bundle)|dynamically imported module|load split bundle/i.test(error.message)
+  );
 }
 
 function mayReload(now: number): boolean {

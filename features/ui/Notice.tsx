@@ -5,7 +5,7 @@ import { Text, type TextTone } from "./Text";
 import { colors, sizes } from "./theme";
 import { webStyle } from "./webStyle";
 
-export type NoticeKind = "caution" | "error" | "offline" | "good";
+type NoticeKind = "caution" | "error" | "offline" | "good";
 
 export interface NoticeProps {
   kind: NoticeKind;

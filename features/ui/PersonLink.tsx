@@ -14,7 +14,10 @@ export function PersonLink({ size = 36 }: { size?: 36 | 40 }) {
       href="/account"
       aria-label={initial === null ? "Account and settings" : `Account and settings, signed in as ${initial}`}
       {...(pathname.startsWith("/account") ? { "aria-current": "page" as const } : null)}
-      style={[{ width: sizes.target, height: sizes.target, alignItems: "center", justifyContent: "center" } as TextStyle, webStyle({ display: "flex" })]}
+      style={[
+        { width: sizes.target, height: sizes.target, alignItems: "center", justifyContent: "center" } as TextStyle,
+        webStyle({ display: "flex" }),
+      ]}
     >
       <View
         style={{

@@ -20,10 +20,21 @@ export interface QueryStateProps<Data> {
 }
 
 /** Loading, failed with a way out, or there. What was there before stays while a newer copy is fetched. */
-export function QueryState<Data>({ query, skeleton, title = "This could not be opened", children }: QueryStateProps<Data>) {
+export function QueryState<Data>({
+  query,
+  skeleton,
+  title = "This could not be opened",
+  children,
+}: QueryStateProps<Data>) {
   if (query.data !== undefined) return <>{children(query.data)}</>;
   if (query.error) {
-    return <ErrorState title={title} text={`${query.error.message} Nothing of yours was lost.`} onRetry={() => void query.refetch()} />;
+    return (
+      <ErrorState
+        title={title}
+        text={`${query.error.message} Nothing of yours was lost.`}
+        onRetry={() => void query.refetch()}
+      />
+    );
   }
   return <>{skeleton ?? <Skeleton />}</>;
 }

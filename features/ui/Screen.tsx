@@ -34,7 +34,20 @@ export interface ScreenProps {
 }
 
 /** One page: sets the title, takes the focus to its h1 when one comes to it, and lays out head, content and actions. */
-export function Screen({ title, subtitle, crumb, back, closes = false, hideBar = false, actions, footer, wide = false, brand = false, large = false, children }: ScreenProps) {
+export function Screen({
+  title,
+  subtitle,
+  crumb,
+  back,
+  closes = false,
+  hideBar = false,
+  actions,
+  footer,
+  wide = false,
+  brand = false,
+  large = false,
+  children,
+}: ScreenProps) {
   const { pathname, arrive, setBarHidden, barHidden } = useShell();
   const phone = useLayout() === "phone";
   const heading = useRef<NativeText>(null);
@@ -57,9 +70,27 @@ export function Screen({ title, subtitle, crumb, back, closes = false, hideBar =
   const foot = footer ?? actions;
   if (!phone) {
     return (
-      <View style={{ flexGrow: 1, paddingHorizontal: sizes.gutterWide, paddingTop: 24, paddingBottom: 40, gap: 20, width: "100%", maxWidth: sizes.content + 2 * sizes.gutterWide }}>
+      <View
+        style={{
+          flexGrow: 1,
+          paddingHorizontal: sizes.gutterWide,
+          paddingTop: 24,
+          paddingBottom: 40,
+          gap: 20,
+          width: "100%",
+          maxWidth: sizes.content + 2 * sizes.gutterWide,
+        }}
+      >
         <WideHead {...head} actions={actions ?? footer} />
-        <View role="main" nativeID="main" {...webProps({ tabIndex: -1 })} style={[{ flexGrow: 1, width: "100%", maxWidth: wide ? sizes.content : 760 }, webStyle({ outlineStyle: "none" })]}>
+        <View
+          role="main"
+          nativeID="main"
+          {...webProps({ tabIndex: -1 })}
+          style={[
+            { flexGrow: 1, width: "100%", maxWidth: wide ? sizes.content : 760 },
+            webStyle({ outlineStyle: "none" }),
+          ]}
+        >
           {children}
         </View>
       </View>
@@ -68,7 +99,12 @@ export function Screen({ title, subtitle, crumb, back, closes = false, hideBar =
   return (
     <View style={{ flexGrow: 1 }}>
       <PhoneTop {...head} />
-      <View role="main" nativeID="main" {...webProps({ tabIndex: -1 })} style={[{ flexGrow: 1 }, webStyle({ outlineStyle: "none" })]}>
+      <View
+        role="main"
+        nativeID="main"
+        {...webProps({ tabIndex: -1 })}
+        style={[{ flexGrow: 1 }, webStyle({ outlineStyle: "none" })]}
+      >
         <View style={{ flexGrow: 1, paddingHorizontal: sizes.gutterPhone, paddingBottom: foot ? 8 : 24 }}>
           {large && (
             <Heading ref={heading} level={1} size={26} focusable style={{ marginTop: 2, marginBottom: 12 }}>
@@ -80,8 +116,18 @@ export function Screen({ title, subtitle, crumb, back, closes = false, hideBar =
         {foot !== undefined && foot !== null && (
           <View
             style={[
-              { gap: 10, paddingHorizontal: sizes.gutterPhone, paddingTop: 8, paddingBottom: 14, backgroundColor: colors.paper, zIndex: 1 },
-              webStyle({ position: "sticky", bottom: barHidden ? 0 : `calc(${sizes.bar}px + env(safe-area-inset-bottom))` }),
+              {
+                gap: 10,
+                paddingHorizontal: sizes.gutterPhone,
+                paddingTop: 8,
+                paddingBottom: 14,
+                backgroundColor: colors.paper,
+                zIndex: 1,
+              },
+              webStyle({
+                position: "sticky",
+                bottom: barHidden ? 0 : `calc(${sizes.bar}px + env(safe-area-inset-bottom))`,
+              }),
             ]}
           >
             {foot}

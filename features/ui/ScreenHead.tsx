@@ -32,7 +32,14 @@ const oneLine = { flexShrink: 1, minWidth: 0 } as const;
 
 function BackLink({ href, closes }: { href: Href; closes: boolean }) {
   return (
-    <Link href={href} aria-label={closes ? "Close" : "Back"} style={[{ width: sizes.target, height: sizes.target, alignItems: "center", justifyContent: "center" } as TextStyle, flex]}>
+    <Link
+      href={href}
+      aria-label={closes ? "Close" : "Back"}
+      style={[
+        { width: sizes.target, height: sizes.target, alignItems: "center", justifyContent: "center" } as TextStyle,
+        flex,
+      ]}
+    >
       <Icon name={closes ? "close" : "back"} color={colors.ink} />
     </Link>
   );
@@ -42,12 +49,48 @@ function BackLink({ href, closes }: { href: Href; closes: boolean }) {
 export function PhoneTop({ title, subtitle, crumb, back, brand, large, closes, heading }: ScreenHeadProps) {
   const way = back ?? crumb?.href;
   return (
-    <View role="banner" style={{ flexDirection: "row", alignItems: "center", gap: 8, minHeight: sizes.top, paddingLeft: way === undefined ? 16 : 4, paddingRight: 10, flexShrink: 0 }}>
+    <View
+      role="banner"
+      style={{
+        flexDirection: "row",
+        alignItems: "center",
+        gap: 8,
+        minHeight: sizes.top,
+        paddingLeft: way === undefined ? 16 : 4,
+        paddingRight: 10,
+        flexShrink: 0,
+      }}
+    >
       {way !== undefined && <BackLink href={way} closes={closes} />}
       {way === undefined && (
-        <Link href="/" aria-label="Larkspan, home" style={[{ minHeight: sizes.target, minWidth: sizes.target, flexDirection: "row", alignItems: "center", gap: 10 } as TextStyle, flex]}>
+        <Link
+          href="/"
+          aria-label="Larkspan, home"
+          style={[
+            {
+              minHeight: sizes.target,
+              minWidth: sizes.target,
+              flexDirection: "row",
+              alignItems: "center",
+              gap: 10,
+            } as TextStyle,
+            flex,
+          ]}
+        >
           <Mark />
-          {brand && <Text style={{ fontFamily: fonts.display, fontWeight: "700", fontSize: 20, lineHeight: 22, letterSpacing: -0.2 }}>Larkspan</Text>}
+          {brand && (
+            <Text
+              style={{
+                fontFamily: fonts.display,
+                fontWeight: "700",
+                fontSize: 20,
+                lineHeight: 22,
+                letterSpacing: -0.2,
+              }}
+            >
+              Larkspan
+            </Text>
+          )}
         </Link>
       )}
       <View style={{ flexGrow: 1, flexShrink: 1, minWidth: 0, paddingVertical: 6 }}>
@@ -58,7 +101,12 @@ export function PhoneTop({ title, subtitle, crumb, back, brand, large, closes, h
                 {crumb?.label}
               </Text>
             ) : (
-              <Heading ref={heading} level={1} focusable style={{ fontFamily: fonts.text, fontWeight: "600", fontSize: 16, lineHeight: 19, letterSpacing: 0 }}>
+              <Heading
+                ref={heading}
+                level={1}
+                focusable
+                style={{ fontFamily: fonts.text, fontWeight: "600", fontSize: 16, lineHeight: 19, letterSpacing: 0 }}
+              >
                 {title}
               </Heading>
             )}
@@ -76,11 +124,30 @@ export function PhoneTop({ title, subtitle, crumb, back, brand, large, closes, h
 }
 
 /** Head of a page on wide and middle screens: crumb, title at 36, line of facts, actions at the right. */
-export function WideHead({ title, subtitle, crumb, back, brand, closes, heading, actions }: ScreenHeadProps & { actions: ReactNode }) {
+export function WideHead({
+  title,
+  subtitle,
+  crumb,
+  back,
+  brand,
+  closes,
+  heading,
+  actions,
+}: ScreenHeadProps & { actions: ReactNode }) {
   if (brand) return null;
   const way = crumb ?? (back === undefined ? undefined : { label: closes ? "Close" : "Back", href: back });
   return (
-    <View role="banner" style={{ flexDirection: "row", flexWrap: "wrap", alignItems: "flex-end", justifyContent: "space-between", columnGap: 24, rowGap: 12 }}>
+    <View
+      role="banner"
+      style={{
+        flexDirection: "row",
+        flexWrap: "wrap",
+        alignItems: "flex-end",
+        justifyContent: "space-between",
+        columnGap: 24,
+        rowGap: 12,
+      }}
+    >
       <View style={{ flexShrink: 1, minWidth: 0 }}>
         {way && (
           <Link href={way.href} style={[{ minHeight: 24, alignSelf: "flex-start" } as TextStyle]}>
@@ -98,7 +165,9 @@ export function WideHead({ title, subtitle, crumb, back, brand, closes, heading,
           </Text>
         )}
       </View>
-      {actions !== undefined && actions !== null && <View style={{ flexDirection: "row", gap: 12, flexWrap: "wrap" }}>{actions}</View>}
+      {actions !== undefined && actions !== null && (
+        <View style={{ flexDirection: "row", gap: 12, flexWrap: "wrap" }}>{actions}</View>
+      )}
     </View>
   );
 }

@@ -25,7 +25,15 @@ export function Segmented<Value extends string>({ options, value, onChange, labe
       role="radiogroup"
       aria-label={label}
       testID={testID}
-      style={{ flexDirection: "row", borderRadius: sizes.radius, borderWidth: 1.5, borderColor: colors.inkSoft, backgroundColor: colors.card, padding: 3, gap: 3 }}
+      style={{
+        flexDirection: "row",
+        borderRadius: sizes.radius,
+        borderWidth: 1.5,
+        borderColor: colors.inkSoft,
+        backgroundColor: colors.card,
+        padding: 3,
+        gap: 3,
+      }}
     >
       {options.map((option, index) => {
         const on = option.value === value;
@@ -47,7 +55,11 @@ export function Segmented<Value extends string>({ options, value, onChange, labe
               backgroundColor: on ? colors.plum : "transparent",
             }}
           >
-            <Text variant="label" tone={on ? "onPlum" : "ink"} style={{ fontWeight: on ? "600" : "500", textAlign: "center" }}>
+            <Text
+              variant="label"
+              tone={on ? "onPlum" : "ink"}
+              style={{ fontWeight: on ? "600" : "500", textAlign: "center" }}
+            >
               {option.label}
             </Text>
           </Pressable>

@@ -9,7 +9,12 @@ import { ThemeProvider, useTheme } from "./ThemeProvider";
 let mockPathname = "/songs";
 jest.mock("expo-router", () => ({
   usePathname: () => mockPathname,
-  Link: ({ href, children, "aria-label": label, "aria-current": current }: AnchorHTMLAttributes<HTMLAnchorElement> & { children: ReactNode }) => (
+  Link: ({
+    href,
+    children,
+    "aria-label": label,
+    "aria-current": current,
+  }: AnchorHTMLAttributes<HTMLAnchorElement> & { children: ReactNode }) => (
     <a href={href} aria-label={label} aria-current={current}>
       {children}
     </a>
@@ -91,12 +96,20 @@ describe("the scheme", () => {
   beforeEach(() => localStorage.clear());
 
   it("follows the system until one is chosen, and is kept on the device", () => {
-    const { unmount } = render(<ThemeProvider><SchemeSwitch /></ThemeProvider>);
+    const { unmount } = render(
+      <ThemeProvider>
+        <SchemeSwitch />
+      </ThemeProvider>,
+    );
     expect(screen.getByText("morning, as the system")).toBeTruthy();
     fireEvent.click(screen.getByText("lamp"));
     expect(document.documentElement.dataset.scheme).toBe("lamplight");
     unmount();
-    render(<ThemeProvider><SchemeSwitch /></ThemeProvider>);
+    render(
+      <ThemeProvider>
+        <SchemeSwitch />
+      </ThemeProvider>,
+    );
     expect(screen.getByText("lamplight, chosen")).toBeTruthy();
     fireEvent.click(screen.getByText("system"));
     expect(document.documentElement.dataset.scheme).toBeUndefined();
@@ -104,7 +117,13 @@ describe("the scheme", () => {
   });
 
   it("puts colours and fonts into the page once", () => {
-    render(<ThemeProvider><ThemeProvider><p /></ThemeProvider></ThemeProvider>);
+    render(
+      <ThemeProvider>
+        <ThemeProvider>
+          <p />
+        </ThemeProvider>
+      </ThemeProvider>,
+    );
     const sheets = document.querySelectorAll("#larkspan-style");
     expect(sheets).toHaveLength(1);
     expect(sheets[0]?.textContent).toContain("@font-face");

@@ -34,7 +34,10 @@ export function Shell({ initial = null, children }: ShellProps) {
     },
     [pathname],
   );
-  const state = useMemo<ShellState>(() => ({ pathname, initial, barHidden, setBarHidden, arrive }), [pathname, initial, barHidden, arrive]);
+  const state = useMemo<ShellState>(
+    () => ({ pathname, initial, barHidden, setBarHidden, arrive }),
+    [pathname, initial, barHidden, arrive],
+  );
   const phone = layout === "phone";
 
   return (
@@ -42,7 +45,12 @@ export function Shell({ initial = null, children }: ShellProps) {
       <a className="skip" href="#main">
         Skip to the content
       </a>
-      <View style={[{ flexGrow: 1, flexDirection: phone ? "column" : "row", backgroundColor: colors.paper }, webStyle({ minHeight: "100dvh" })]}>
+      <View
+        style={[
+          { flexGrow: 1, flexDirection: phone ? "column" : "row", backgroundColor: colors.paper },
+          webStyle({ minHeight: "100dvh" }),
+        ]}
+      >
         {!phone && <Rail wide={layout === "wide"} />}
         <View style={{ flexGrow: 1, flexShrink: 1, flexBasis: phone ? "auto" : 0, minWidth: 0 }}>
           <MissingChunkBoundary path={pathname}>{children}</MissingChunkBoundary>

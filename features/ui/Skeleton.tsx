@@ -9,14 +9,23 @@ export interface SkeletonProps {
   words?: string;
 }
 
-const usual: NonNullable<SkeletonProps["bars"]> = [{ height: 40, width: 220 }, { width: "82%" }, { width: "58%" }, { height: 96 }];
+const usual: NonNullable<SkeletonProps["bars"]> = [
+  { height: 40, width: 220 },
+  { width: "82%" },
+  { width: "58%" },
+  { height: 96 },
+];
 
 /** Grey bars in the places of what is coming. */
 export function Skeleton({ bars = usual, words = "Loading" }: SkeletonProps) {
   return (
     <View aria-busy style={{ gap: 10 }}>
       {bars.map(({ height = 14, width = "100%" }, index) => (
-        <View key={index} aria-hidden style={{ height, width, borderRadius: height > 20 ? 10 : 7, backgroundColor: colors.line }} />
+        <View
+          key={index}
+          aria-hidden
+          style={{ height, width, borderRadius: height > 20 ? 10 : 7, backgroundColor: colors.line }}
+        />
       ))}
       <LiveText variant="small" tone="soft">
         {words}

@@ -18,14 +18,41 @@ export interface SvgLabelProps {
 }
 
 /** Words inside a drawing, their accidentals from the music font, 1.2 times the size and raised. */
-export function SvgLabel({ x, y, children, size = 12, family = "text", weight = "400", fill = colors.inkSoft, anchor = "start", halo = false }: SvgLabelProps) {
-  const rim = halo ? { stroke: "var(--ground,var(--paper))", strokeWidth: 3.5, strokeLinejoin: "round", paintOrder: "stroke" } : {};
+export function SvgLabel({
+  x,
+  y,
+  children,
+  size = 12,
+  family = "text",
+  weight = "400",
+  fill = colors.inkSoft,
+  anchor = "start",
+  halo = false,
+}: SvgLabelProps) {
+  const rim = halo
+    ? { stroke: "var(--ground,var(--paper))", strokeWidth: 3.5, strokeLinejoin: "round", paintOrder: "stroke" }
+    : {};
   return (
-    <SvgText x={x} y={y} fill={fill} fontFamily={fonts[family]} fontSize={size} fontWeight={weight} textAnchor={anchor} {...webProps(rim)}>
+    <SvgText
+      x={x}
+      y={y}
+      fill={fill}
+      fontFamily={fonts[family]}
+      fontSize={size}
+      fontWeight={weight}
+      textAnchor={anchor}
+      {...webProps(rim)}
+    >
       {splitAccidentals(children).map(({ text, accidental }, index) =>
         accidental ? (
           <Fragment key={index}>
-            <TSpan fontFamily={fonts.music} fontSize={size * 1.2} fontWeight="400" dy={-0.13 * size} {...webProps({ className: "mu" })}>
+            <TSpan
+              fontFamily={fonts.music}
+              fontSize={size * 1.2}
+              fontWeight="400"
+              dy={-0.13 * size}
+              {...webProps({ className: "mu" })}
+            >
               {text}
             </TSpan>
             <TSpan dy={0.13 * size}>{"\u200B"}</TSpan>

@@ -19,7 +19,11 @@ describe("splitAccidentals", () => {
 
   it("loses no sign of the text", () => {
     const text = "♭B♭ ♯♮𝄪x";
-    expect(splitAccidentals(text).map((part) => part.text).join("")).toBe(text);
+    expect(
+      splitAccidentals(text)
+        .map((part) => part.text)
+        .join(""),
+    ).toBe(text);
   });
 });
 
@@ -67,7 +71,12 @@ describe("the shipped fonts", () => {
 
   it("limit the music font to the accidentals", () => {
     expect(css).toContain(`font-family:"Noto Music";font-weight:400;font-display:swap;unicode-range:${musicRange}`);
-    const ranges = musicRange.split(",").map((range) => range.replace("U+", "").split("-").map((code) => parseInt(code, 16)));
+    const ranges = musicRange.split(",").map((range) =>
+      range
+        .replace("U+", "")
+        .split("-")
+        .map((code) => parseInt(code, 16)),
+    );
     for (const sign of ["♯", "♭", "♮", "𝄪", "𝄫"]) {
       const code = sign.codePointAt(0) ?? 0;
       expect(ranges.some(([from = 0, to = 0]) => code >= from && code <= to)).toBe(true);

@@ -4,7 +4,8 @@ import { setAccidentals } from "./accidentals";
 import { colors, fonts } from "./theme";
 import { webProps } from "./webStyle";
 
-export type TextVariant = "body" | "strong" | "small" | "tiny" | "label" | "title" | "display" | "number" | "mono" | "monoBold";
+type TextVariant =
+  "body" | "strong" | "small" | "tiny" | "label" | "title" | "display" | "number" | "mono" | "monoBold";
 export type TextTone = "ink" | "soft" | "plum" | "onPlum" | "lagoon" | "honey" | "brick";
 
 export interface TextProps extends NativeTextProps {
@@ -15,7 +16,12 @@ export interface TextProps extends NativeTextProps {
   style?: StyleProp<TextStyle>;
 }
 
-const face = (fontFamily: string, fontWeight: "400" | "500" | "600" | "700", fontSize: number, lineHeight: number): TextStyle => ({
+const face = (
+  fontFamily: string,
+  fontWeight: "400" | "500" | "600" | "700",
+  fontSize: number,
+  lineHeight: number,
+): TextStyle => ({
   fontFamily,
   fontWeight,
   fontSize,

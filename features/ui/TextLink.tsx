@@ -20,8 +20,22 @@ export function TextLink({ href, children, size = 14, testID, style }: TextLinkP
       href={href}
       testID={testID}
       style={[
-        { color: colors.plum, fontFamily: fonts.text, fontWeight: "600", fontSize: size, lineHeight: Math.round(size * 1.45) },
-        webStyle({ textDecorationLine: "underline", textDecorationThickness: 1, textUnderlineOffset: 3, whiteSpace: "normal", display: "inline-block", padding: "10px 6px", margin: "-10px -6px" }),
+        {
+          color: colors.plum,
+          fontFamily: fonts.text,
+          fontWeight: "600",
+          fontSize: size,
+          lineHeight: Math.round(size * 1.45),
+        },
+        webStyle({
+          textDecorationLine: "underline",
+          textDecorationThickness: 1,
+          textUnderlineOffset: 3,
+          whiteSpace: "normal",
+          display: "inline-block",
+          padding: "10px 6px",
+          margin: "-10px -6px",
+        }),
         style,
       ]}
     >

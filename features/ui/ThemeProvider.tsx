@@ -12,7 +12,12 @@ interface Theme {
 }
 
 const storageKey = "larkspan-scheme";
-const ThemeContext = createContext<Theme>({ colors, scheme: "morning", followsSystem: true, setScheme: () => undefined });
+const ThemeContext = createContext<Theme>({
+  colors,
+  scheme: "morning",
+  followsSystem: true,
+  setScheme: () => undefined,
+});
 
 export function useTheme(): Theme {
   return useContext(ThemeContext);
@@ -36,7 +41,8 @@ function keepScheme(scheme: Scheme | null): void {
   }
 }
 
-const darkQuery = () => (typeof window.matchMedia === "function" ? window.matchMedia("(prefers-color-scheme: dark)") : null);
+const darkQuery = () =>
+  typeof window.matchMedia === "function" ? window.matchMedia("(prefers-color-scheme: dark)") : null;
 
 function installStyle(): void {
   if (document.getElementById("larkspan-style")) return;

@@ -16,20 +16,18 @@ function contrast(one: string, other: string): number {
 }
 
 const schemes: readonly Scheme[] = ["morning", "lamplight"];
-const text: readonly (readonly [ColorName, ColorName])[] = (["ink", "inkSoft", "plum", "lagoon", "honeyText", "brick"] as const).flatMap((name) => [
-  [name, "paper"] as const,
-  [name, "card"] as const,
-]);
+const text: readonly (readonly [ColorName, ColorName])[] = (
+  ["ink", "inkSoft", "plum", "lagoon", "honeyText", "brick"] as const
+).flatMap((name) => [[name, "paper"] as const, [name, "card"] as const]);
 const onFills: readonly (readonly [ColorName, ColorName])[] = [
   ["onPlum", "plum"],
   ["paper", "ink"],
   ["paper", "lagoon"],
   ["inkSoft", "line"],
 ];
-const graphics: readonly (readonly [ColorName, ColorName])[] = (["lagoon", "honey", "brick", "plum", "ink", "inkSoft"] as const).flatMap((name) => [
-  [name, "paper"] as const,
-  [name, "card"] as const,
-]);
+const graphics: readonly (readonly [ColorName, ColorName])[] = (
+  ["lagoon", "honey", "brick", "plum", "ink", "inkSoft"] as const
+).flatMap((name) => [[name, "paper"] as const, [name, "card"] as const]);
 
 describe.each(schemes)("the colours of %s", (scheme) => {
   const { [scheme]: colors } = tokens;
@@ -43,7 +41,10 @@ describe.each(schemes)("the colours of %s", (scheme) => {
   });
 
   it("keeps the oldest notes of a trail, at 76 %, over 3 : 1", () => {
-    const mix = (at: number) => Math.round(0.76 * parseInt(colors.lagoon.slice(at, at + 2), 16) + 0.24 * parseInt(colors.paper.slice(at, at + 2), 16));
+    const mix = (at: number) =>
+      Math.round(
+        0.76 * parseInt(colors.lagoon.slice(at, at + 2), 16) + 0.24 * parseInt(colors.paper.slice(at, at + 2), 16),
+      );
     const faded = `#${[1, 3, 5].map((at) => mix(at).toString(16).padStart(2, "0")).join("")}`;
     expect(contrast(faded, colors.paper)).toBeGreaterThanOrEqual(3);
   });

@@ -11,7 +11,11 @@ export function radioTarget(key: string, index: number, count: number): number |
 }
 
 /** Keyboard of a radio group: one stop for Tab, arrows choose, Space chooses. */
-export function useRadioKeys<Value extends string>(values: readonly Value[], value: Value | null, onChange: (value: Value) => void) {
+export function useRadioKeys<Value extends string>(
+  values: readonly Value[],
+  value: Value | null,
+  onChange: (value: Value) => void,
+) {
   const items = useRef<(View | null)[]>([]);
   const chosen = value === null ? -1 : values.indexOf(value);
   return (index: number) => ({

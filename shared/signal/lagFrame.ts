@@ -33,6 +33,7 @@ export const SHORT_WINDOW = 256;
 export function createLagMeter(length = WINDOW): (samples: Float32Array, from: number) => LagFrame {
   const autocorrelator = Autocorrelator.forFloat32Array(length);
   const window = new Float32Array(length);
+  const lastLag = MAX_LAG;
   const correlation = new Float32Array(length);
   return (samples, from) => {
     let energy = 0;
@@ -41,12 +42,12 @@ export function createLagMeter(length = WINDOW): (samples: Float32Array, from: n
       window[i] = x;
       energy += x * x;
     }
-    const r = new Float32Array(MAX_LAG + 1);
-    const m = new Float32Array(MAX_LAG + 1);
+    const r = new Float32Array(lastLag + 1);
+    const m = new Float32Array(lastLag + 1);
     if (energy > 0) {
       autocorrelator.autocorrelate(window, correlation);
       let both = 2 * energy;
-      for (let lag = 0; lag <= MAX_LAG; lag++) {
+      for (let lag = 0; lag <= lastLag; lag++) {
         if (lag > 0) both -= window[lag - 1]! ** 2 + window[length - lag]! ** 2;
         r[lag] = correlation[lag]!;
         m[lag] = Math.max(0, both);

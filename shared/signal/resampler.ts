@@ -48,22 +48,21 @@ export function createResampler(sampleRate: number): Resampler {
     input.set(kept);
     input.set(pcm, kept.length);
     const end = keptFrom + input.length;
-    const out: number[] = [];
-    for (;;) {
+    const out = new Float32Array(Math.max(0, Math.ceil(((end - half) * phases) / step) - nextOut));
+    for (let n = 0; n < out.length; n++) {
       const position = nextOut * step;
       const whole = Math.floor(position / phases);
-      if (whole + half >= end) break;
       const kernelFrom = (position - whole * phases) * taps;
       const inputFrom = whole - half + 1 - keptFrom;
       let sum = 0;
       for (let tap = 0; tap < taps; tap++) sum += kernels[kernelFrom + tap]! * input[inputFrom + tap]!;
-      out.push(sum);
+      out[n] = sum;
       nextOut++;
     }
     const firstNeeded = Math.floor((nextOut * step) / phases) - half + 1;
     kept = input.slice(Math.max(0, firstNeeded - keptFrom));
     keptFrom = Math.max(keptFrom, firstNeeded);
-    return withoutRumble(Float32Array.from(out));
+    return withoutRumble(out);
   }
   return { push: take, finish: () => take(new Float32Array(half + 1)) };
 }

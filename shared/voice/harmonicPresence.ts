@@ -8,6 +8,7 @@ const LEAST_SHARE = 3e-4;
 /** With fewer harmonics than this to look at, what is missing proves less. */
 const SURE_FROM = 3;
 
+const lastLag = MAX_LAG;
 const lagWindow = Float32Array.from({ length: MAX_LAG + 1 }, (_, lag) => (lag === 0 ? 0.5 : 0.5 + 0.5 * Math.cos((Math.PI * lag) / MAX_LAG)));
 
 /**
@@ -63,7 +64,7 @@ export function powerAt(r: Float32Array, hz: number): number {
   let before = step / 2;
   let now = 1;
   let sum = 0;
-  for (let lag = 0; lag <= MAX_LAG; lag++) {
+  for (let lag = 0; lag <= lastLag; lag++) {
     sum += lagWindow[lag]! * r[lag]! * now;
     const next = step * now - before;
     before = now;

@@ -7,6 +7,9 @@ import { DIGITAL_SILENCE_DB, type RoomFloor } from "./roomFloor";
 export const LOWEST_HZ = 60;
 export const HIGHEST_HZ = 1400;
 const MOST_CANDIDATES = 8;
+/** Read once: these stand in the innermost loops. */
+const lastLag = MAX_LAG;
+const windowLength = WINDOW;
 const LEAST_CLARITY = 0.2;
 /** Below this clarity a frame is looked at again through the short window, */
 const CLEAR_ENOUGH = 0.8;
@@ -57,7 +60,8 @@ export function findCandidates(frame: LagFrame, room: RoomFloor, short: () => La
   const clearest = long.reduce((top, c) => Math.max(top, c.clarity), 0);
   const loudEnough = aboveRoomDb > 3 && frame.levelDb > DIGITAL_SILENCE_DB;
   const candidates = clearest < CLEAR_ENOUGH && loudEnough ? joined(long, peaks(cleanedDifference(short(), room, SHORT_WINDOW))) : long;
-  const r = frame.r.map((x, lag) => x - room.r[lag]!);
+  const r = new Float32Array(lastLag + 1);
+  for (let lag = 0; lag <= lastLag; lag++) r[lag] = frame.r[lag]! - room.r[lag]!;
   out.candidates = candidates.map((c) => (hasShorter(c, candidates) ? { ...c, presence: harmonicPresence(r, c.hz) } : c));
   const whole = out.candidates.filter((c) => c.presence >= WHOLE).reduce((top, c) => Math.max(top, c.clarity), 0);
   const any = out.candidates.reduce((top, c) => Math.max(top, c.clarity), 0);
@@ -81,7 +85,7 @@ function joined(long: PitchCandidate[], short: PitchCandidate[]): PitchCandidate
 function peaks(n: Float32Array): PitchCandidate[] {
   const found: PitchCandidate[] = [];
   const shortest = Math.floor(ANALYSIS_RATE / DECOY_HZ);
-  for (let lag = shortest; lag < MAX_LAG - 4; lag++) {
+  for (let lag = shortest; lag < lastLag - 4; lag++) {
     const here = n[lag]!;
     if (here < LEAST_CLARITY - 0.1 || here < n[lag - 1]! || here <= n[lag + 1]!) continue;
     const [period, clarity] = refine(n, lag);
@@ -100,12 +104,14 @@ function rank(candidate: PitchCandidate): number {
 
 /** The room's share of a window scales with the overlap at each lag. */
 function cleanedDifference(frame: LagFrame, room: RoomFloor, length: number): Float32Array {
-  const n = new Float32Array(MAX_LAG + 1);
-  for (let lag = 0; lag <= MAX_LAG; lag++) {
-    const whole = frame.m[lag]!;
-    const share = (length - lag) / (WINDOW - lag);
-    const rest = Math.max(whole - share * room.m[lag]!, 0.2 * whole);
-    n[lag] = rest > 0 ? (2 * (frame.r[lag]! - share * room.r[lag]!)) / rest : 0;
+  const n = new Float32Array(lastLag + 1);
+  const { r, m } = frame;
+  const { r: roomR, m: roomM } = room;
+  for (let lag = 0; lag <= lastLag; lag++) {
+    const both = m[lag]!;
+    const share = (length - lag) / (windowLength - lag);
+    const rest = Math.max(both - share * roomM[lag]!, 0.2 * both);
+    n[lag] = rest > 0 ? (2 * (r[lag]! - share * roomR[lag]!)) / rest : 0;
   }
   return n;
 }

@@ -38,8 +38,9 @@ export function measureRoom(frames: readonly LagFrame[]): RoomFloor {
   const still = live.filter((f) => f.levelDb <= ceiling && 10 * Math.log10(f.m[0]! / WINDOW) <= ceiling + 3);
   if (still.length === 0 || isChanging(still)) return silentRoom();
   const room = silentRoom();
+  const lastLag = MAX_LAG;
   for (const frame of still) {
-    for (let lag = 0; lag <= MAX_LAG; lag++) {
+    for (let lag = 0; lag <= lastLag; lag++) {
       room.r[lag]! += frame.r[lag]! / still.length;
       room.m[lag]! += frame.m[lag]! / still.length;
     }

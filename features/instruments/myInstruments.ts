@@ -60,6 +60,11 @@ export function ownedAs(owned: readonly OwnInstrument[], id: string, newId: () =
   return { ...preset, id: newId(), presetId: preset.id, favourite: false, ...(fretMap === undefined ? null : { fretMap }) };
 }
 
+/** Name and tuning: names that hold the tuning say it once. */
+export function instrumentWords(instrument: Instrument): string {
+  return instrument.name.includes(",") ? instrument.name : `${instrument.name}, ${stringWords(instrument)}`;
+}
+
 /** The strings by name, "A D F♯"; with octaves where asked. */
 export function stringWords(instrument: Instrument, octaves = false): string {
   return instrument.strings.map(({ note }) => glyphs(octaves ? note : note.replace(/-?\d+$/, ""))).join(" ");

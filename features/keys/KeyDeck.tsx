@@ -3,10 +3,12 @@ import { View } from "react-native";
 import { SpanLadder } from "@/features/span/SpanLadder";
 import { Card } from "@/features/ui/Card";
 import { Text } from "@/features/ui/Text";
-import { colors, fonts } from "@/features/ui/theme";
+import { useLayout } from "@/features/ui/useLayout";
+import { fonts } from "@/features/ui/theme";
 import type { SingingVoice } from "@/shared/keys/keyScore";
 import { KeyPartBars } from "./KeyPartBars";
 import { spellingIn, type KeyRow } from "./keyRows";
+import { PeekCard } from "./PeekCard";
 
 export interface KeyDeckProps {
   rows: readonly KeyRow[];
@@ -22,6 +24,7 @@ const gap = 10;
 export function KeyDeck({ rows, voice, selected, onSelect }: KeyDeckProps) {
   const byPitch = [...rows].sort((a, b) => a.shift - b.shift);
   const at = byPitch.indexOf(selected);
+  const roomy = useLayout() !== "phone";
   const deck = useRef<HTMLDivElement>(null);
   const cards = useRef<(HTMLDivElement | null)[]>([]);
   const shown = useRef(-1);
@@ -79,10 +82,10 @@ export function KeyDeck({ rows, voice, selected, onSelect }: KeyDeckProps) {
         >
           {Math.abs(index - at) > 2 ? (
             <Card style={{ flexGrow: 1 }}>{null}</Card>
-          ) : row === selected ? (
-            <KeyCard row={row} voice={voice} />
+          ) : row === selected || roomy ? (
+            <KeyCard row={row} voice={voice} selected={row === selected} />
           ) : (
-            <PeekCard row={row} side={index < at ? "right" : "left"} />
+            <PeekCard row={row} voice={voice} side={index < at ? "right" : "left"} />
           )}
         </div>
       ))}
@@ -91,9 +94,9 @@ export function KeyDeck({ rows, voice, selected, onSelect }: KeyDeckProps) {
 }
 
 /** One key in full: score, its reason, the span, and the five parts. */
-export function KeyCard({ row, voice }: { row: KeyRow; voice: SingingVoice }) {
+function KeyCard({ row, voice, selected }: { row: KeyRow; voice: SingingVoice; selected: boolean }) {
   return (
-    <Card selected testID="key-card" style={{ flexGrow: 1, padding: 14 }}>
+    <Card selected={selected} {...(selected ? { testID: "key-card" } : null)} style={{ flexGrow: 1, padding: selected ? 14 : 15 }}>
       <View style={{ flexDirection: "row", justifyContent: "space-between", alignItems: "flex-end" }}>
         <Text style={{ fontFamily: fonts.display, fontWeight: "700", fontSize: 52, lineHeight: 46, letterSpacing: -1 }}>{row.sign}</Text>
         <Text variant="small" tone="soft">
@@ -106,39 +109,9 @@ export function KeyCard({ row, voice }: { row: KeyRow; voice: SingingVoice }) {
       <Text variant="strong" style={{ marginTop: 12, lineHeight: 21, minHeight: 42 }}>
         {row.reason}
       </Text>
-      <View style={{ flexDirection: "row", gap: 14, alignItems: "stretch", marginTop: 6 }}>
+      <View style={{ flexDirection: "row", flexWrap: "wrap", gap: 14, alignItems: "stretch", marginTop: 6 }}>
         <SpanLadder voice={voice} marks={row.marks} step={12} width={166} spelling={spellingIn(row.key)} />
         <KeyPartBars parts={row.parts} />
-      </View>
-    </Card>
-  );
-}
-
-/** A neighbour of the card in the middle: only the edge that shows. */
-function PeekCard({ row, side }: { row: KeyRow; side: "left" | "right" }) {
-  return (
-    <Card style={{ flexGrow: 1, paddingHorizontal: 4, alignItems: side === "left" ? "flex-start" : "flex-end" }}>
-      <View style={{ width: 26, alignItems: "center" }}>
-        <Text style={{ fontFamily: fonts.display, fontWeight: "700", fontSize: row.sign.length > 2 ? 16 : 20, lineHeight: 24 }}>{row.sign}</Text>
-        <Text variant="mono" tone="soft" style={{ fontSize: 12, lineHeight: 16 }}>
-          {row.score}
-        </Text>
-      </View>
-      <View style={{ gap: 9, marginTop: 40, alignItems: side === "left" ? "flex-start" : "flex-end" }}>
-        {[...row.marks].sort((a, b) => b.midi - a.midi).map((mark) => (
-          <View
-            key={mark.midi}
-            style={{
-              height: 8,
-              width: Math.min(26, 8 + mark.share * 100),
-              borderRadius: 4,
-              backgroundColor: mark.zone === "comfort" ? colors.ink : "transparent",
-              borderWidth: mark.zone === "comfort" ? 0 : 1.5,
-              borderStyle: mark.zone === "beyond" ? "dotted" : "solid",
-              borderColor: mark.zone === "beyond" ? colors.brick : colors.honey,
-            }}
-          />
-        ))}
       </View>
     </Card>
   );

@@ -32,7 +32,7 @@ export function KeyList({ rows, voice, selected, onSelect }: KeyListProps) {
         </Text>
         <VoiceStripHeader voice={voice} scale={scale} width={112} />
         <Text variant="tiny" tone="soft" style={{ flexGrow: 1, textAlign: "right" }}>
-          largest reason, of 100
+          reason, of 100
         </Text>
       </View>
       <View role="list" testID="key-list">

@@ -3,6 +3,7 @@ import { View } from "react-native";
 import { Heading } from "@/features/ui/Heading";
 import { Text } from "@/features/ui/Text";
 import { webStyle } from "@/features/ui/webStyle";
+import { DecidedLine } from "./DecidedLine";
 import { KeyColumn } from "./KeyColumn";
 import type { KeyRow } from "./keyRows";
 import { KeysMissing } from "./KeysMissing";
@@ -19,7 +20,7 @@ export interface KeyPaneProps {
 }
 
 /** The middle column of a wide song page. */
-export function KeyPane({ songId, hasTune, keys: { rows, voice }, voiceName, selected, onSelect }: KeyPaneProps) {
+export function KeyPane({ songId, hasTune, keys: { rows, voice, decision, saving, undo }, voiceName, selected, onSelect }: KeyPaneProps) {
   return (
     <View testID="key-pane">
       <View style={{ flexDirection: "row", justifyContent: "space-between", alignItems: "baseline", minHeight: 28, marginBottom: 10 }}>
@@ -46,6 +47,11 @@ export function KeyPane({ songId, hasTune, keys: { rows, voice }, voiceName, sel
         </>
       ) : (
         <KeysMissing songId={songId} missing={hasTune ? "voice" : "tune"} />
+      )}
+      {decision && (
+        <View style={{ marginTop: 12 }}>
+          <DecidedLine decision={decision} saving={saving} onUndo={undo} />
+        </View>
       )}
     </View>
   );

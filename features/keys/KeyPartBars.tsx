@@ -9,7 +9,7 @@ import { partNames } from "./partWords";
 /** The five parts of a score, each as points of its most and as a bar. */
 export function KeyPartBars({ parts }: { parts: KeyParts }) {
   return (
-    <View role="list" style={{ flexGrow: 1, flexShrink: 1, minWidth: 0, justifyContent: "space-between", gap: 7 }}>
+    <View role="list" style={{ flexGrow: 1, flexShrink: 1, flexBasis: 88, minWidth: 0, justifyContent: "space-between", gap: 7 }}>
       {partNames.map(({ part, name }) => (
         <View role="listitem" key={part}>
           <Text variant="tiny" tone="soft" style={{ fontWeight: "500", lineHeight: 15 }}>

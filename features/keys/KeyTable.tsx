@@ -3,7 +3,7 @@ import { useWindowDimensions } from "react-native";
 import { KeySpan } from "@/features/span/KeySpan";
 import { KeySpanHeader } from "@/features/span/KeySpanHeader";
 import { keySpanWidth } from "@/features/span/keySpanGeometry";
-import { setAccidentals } from "@/features/ui/accidentals";
+import { setSigns } from "@/features/ui/textSigns";
 import { colors, fonts, sizes } from "@/features/ui/theme";
 import type { SingingVoice } from "@/shared/keys/keyScore";
 import { commonScale, spellingIn, type KeyOrder, type KeyRow, type Room } from "./keyRows";
@@ -78,7 +78,7 @@ export function KeyTable({ rows, voice, selected, onSelect, order, onOrder, wayO
               Chords
             </th>
             <th scope="col" style={head}>
-              {setAccidentals(`Best way on ${instrument}`)}
+              {setSigns(`Best way on ${instrument}`)}
             </th>
           </tr>
         </thead>
@@ -112,13 +112,13 @@ function Row({ row, group, on, onSelect, way, children }: { row: KeyRow; group: 
         />
       </td>
       <th scope="row" style={{ ...td, ...secondColumn, textAlign: "left", fontWeight: 400 }}>
-        <span style={{ font: `700 26px/1 ${fonts.display}`, display: "inline-block", minWidth: 40, color: faint }}>{setAccidentals(row.sign)}</span>
+        <span style={{ font: `700 26px/1 ${fonts.display}`, display: "inline-block", minWidth: 40, color: faint }}>{setSigns(row.sign)}</span>
         <span style={{ font: `500 12px/1 ${fonts.text}`, color: colors.inkSoft, whiteSpace: "nowrap" }}>{row.moved}</span>
       </th>
       <td style={td}>
         <div style={{ display: "grid", gridTemplateColumns: "46px 1fr", alignItems: "center" }}>
-          <span style={{ font: `${on ? 700 : 600} ${on ? 26 : 20}px/1 ${fonts.display}`, color: row.beyond ? colors.brick : on ? colors.lagoon : colors.ink }}>{row.score}</span>
-          <span style={{ font: `400 13px/16px ${fonts.text}`, color: on ? colors.ink : colors.inkSoft, paddingRight: 12 }}>{setAccidentals(row.reason.replace(/\.$/, ""))}</span>
+          <span data-testid="key-score" style={{ font: `${on ? 700 : 600} ${on ? 26 : 20}px/1 ${fonts.display}`, color: row.beyond ? colors.brick : on ? colors.lagoon : colors.ink }}>{row.score}</span>
+          <span style={{ font: `400 13px/16px ${fonts.text}`, color: on ? colors.ink : colors.inkSoft, paddingRight: 12 }}>{setSigns(row.reason.replace(/\.$/, ""))}</span>
         </div>
       </td>
       <td style={{ ...td, padding: 0, lineHeight: 0 }}>{children}</td>
@@ -127,7 +127,7 @@ function Row({ row, group, on, onSelect, way, children }: { row: KeyRow; group: 
       <td style={{ ...td, paddingLeft: 8 }}>
         <div data-mono style={{ display: "grid", gridTemplateColumns: "repeat(4, 36px)", font: `${on ? 600 : 400} 14px/20px ${fonts.mono}`, color: faint, whiteSpace: "nowrap" }}>
           {row.chords.map((chord) => (
-            <span key={chord}>{setAccidentals(chord)}</span>
+            <span key={chord}>{setSigns(chord)}</span>
           ))}
         </div>
       </td>
@@ -140,7 +140,7 @@ function Row({ row, group, on, onSelect, way, children }: { row: KeyRow; group: 
           <span style={{ color: colors.inkSoft }}>None found</span>
         ) : (
           <>
-            <span style={{ display: "block", font: `${on ? 600 : 500} 14px/17px ${fonts.text}`, color: faint }}>{setAccidentals(way.title)}</span>
+            <span style={{ display: "block", font: `${on ? 600 : 500} 14px/17px ${fonts.text}`, color: faint }}>{setSigns(way.title)}</span>
             <span style={{ display: "block", font: `400 12px/15px ${fonts.text}`, color: colors.inkSoft }}>{way.cost}</span>
           </>
         )}
@@ -171,4 +171,4 @@ const firstColumn: CSSProperties = { position: "sticky", left: 0, zIndex: 1 };
 const secondColumn: CSSProperties = { position: "sticky", left: 28, zIndex: 1 };
 const sorter: CSSProperties = { font: "inherit", color: "inherit", background: "none", border: 0, padding: 0, minHeight: 32, width: "100%", cursor: "pointer", display: "block" };
 const roomy: CSSProperties = { position: "relative" };
-const scrolling: CSSProperties = { overflow: "auto", maxHeight: "calc(100dvh - 48px)", paddingLeft: 12, marginLeft: -12 };
+const scrolling: CSSProperties = { position: "relative", overflow: "auto", maxHeight: "calc(100dvh - 48px)", paddingLeft: 12, marginLeft: -12 };

@@ -10,7 +10,7 @@ import { Skeleton } from "@/features/ui/Skeleton";
 import { Text } from "@/features/ui/Text";
 import { useLayout } from "@/features/ui/useLayout";
 import type { Song } from "@/shared/contract/song";
-import { decidedOn } from "./decide";
+import { DecidedLine } from "./DecidedLine";
 import { KeyDeck } from "./KeyDeck";
 import { KeyLegend } from "./KeyLegend";
 import { KeyList } from "./KeyList";
@@ -63,8 +63,8 @@ export function KeysScreen({ song, keys, pending, voice, wayOf, instrument }: Ke
   );
   return (
     <Screen
-      title={wide ? song.title : "Keys for your voice"}
-      subtitle={wide ? songWords(song, voice?.name ?? null, keys.voice, instrument.strings) : song.title}
+      title={wide ? "All twelve keys, side by side" : "Keys for your voice"}
+      subtitle={!phone ? songWords(song, voice?.name ?? null, keys.voice, instrument.strings) : song.title}
       crumb={back}
       wide
       actions={phone ? undefined : actions}
@@ -83,13 +83,12 @@ export function KeysScreen({ song, keys, pending, voice, wayOf, instrument }: Ke
           )}
           {wide ? (
             <>
-              <View style={{ flexDirection: "row", flexWrap: "wrap", alignItems: "baseline", columnGap: 5, marginBottom: 10 }}>
-                <Text tone="soft">All twelve keys,</Text>
+              <Text tone="soft" style={{ lineHeight: 32, marginBottom: 10 }}>
+                {"Show the "}
                 <Select inline label="Order of the keys" value={order} options={keyOrders} onChange={setOrder} testID="key-order" />
-                <Text tone="soft">, played on</Text>
-                {instrument.chooser}
-                <Text tone="soft">.</Text>
-              </View>
+                {", played on "}
+                {instrument.chooser}.
+              </Text>
               <KeyTable
                 rows={sortedRows(rows, order)}
                 voice={keys.voice}
@@ -118,9 +117,8 @@ export function KeysScreen({ song, keys, pending, voice, wayOf, instrument }: Ke
             </>
           )}
           {decision && (
-            <View style={{ flexDirection: "row", flexWrap: "wrap", alignItems: "center", columnGap: 12, marginTop: 12 }}>
-              <Text variant="small" tone="soft">{`Your key was chosen on ${decidedOn(decision)}. ${decision.reason}`}</Text>
-              <Button kind="text" small label="Undo" accessibleName="Undo my key" disabled={keys.saving} onPress={keys.undo} testID="undo-key" />
+            <View style={{ marginTop: 12 }}>
+              <DecidedLine decision={decision} saving={keys.saving} onUndo={keys.undo} />
             </View>
           )}
         </>

@@ -1,5 +1,5 @@
 import { Link } from "expo-router";
-import { View, type TextStyle } from "react-native";
+import { useWindowDimensions, View, type TextStyle } from "react-native";
 import { VoiceStrip } from "@/features/span/VoiceStrip";
 import { Card } from "@/features/ui/Card";
 import { Icon } from "@/features/ui/Icon";
@@ -25,10 +25,11 @@ const before = { decided: "My key", best: "Best for your voice", written: "As wr
 /** The key in hand with its span, as a way to all twelve. */
 export function MyKeyCard({ songId, inHand, voice }: MyKeyCardProps) {
   const { key, shift, row, because } = inHand;
+  const stripWidth = Math.min(176, Math.max(96, useWindowDimensions().width - 222));
   const name = (midi: number) => glyphs(noteName(midi, spellingIn(key)));
   return (
-    <Link href={{ pathname: "/songs/[id]/keys", params: { id: songId } }} testID="my-key" style={webStyle({ display: "block" })}>
-      <Card style={{ flexDirection: "row", alignItems: "center", gap: 14, paddingVertical: 12, paddingHorizontal: 14 }}>
+    <Link href={{ pathname: "/songs/[id]/keys", params: { id: songId } }} testID="my-key" style={webStyle({ display: "flex" })}>
+      <Card style={{ flexGrow: 1, flexShrink: 1, minWidth: 0, flexDirection: "row", alignItems: "center", gap: 14, paddingVertical: 12, paddingHorizontal: 14 }}>
         <Text style={{ fontFamily: fonts.display, fontWeight: "700", fontSize: 36, lineHeight: 40 }}>{glyphs(keySign(key))}</Text>
         <View style={{ flexGrow: 1, flexShrink: 1, flexBasis: 0, minWidth: 0, gap: 4 }}>
           <Text variant="small">
@@ -36,11 +37,11 @@ export function MyKeyCard({ songId, inHand, voice }: MyKeyCardProps) {
             {because === "written" ? ". See which key suits your voice." : `, ${moveWords(shift)}`}
           </Text>
           {row && voice && (
-            <View style={{ flexDirection: "row", alignItems: "center", gap: 6, flexWrap: "wrap" } as TextStyle}>
+            <View style={{ flexDirection: "row", alignItems: "center", gap: 6}}>
               <Text tone="soft" style={end}>
                 {name(row.lowMidi)}
               </Text>
-              <VoiceStrip voice={voice} marks={row.marks} scale={commonScale([row], voice)} width={160} spelling={spellingIn(key)} />
+              <VoiceStrip voice={voice} marks={row.marks} scale={commonScale([row], voice)} width={stripWidth} spelling={spellingIn(key)} />
               <Text tone="soft" style={end}>
                 {name(row.highMidi)}
               </Text>

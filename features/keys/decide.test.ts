@@ -12,11 +12,11 @@ const choice: Choice = {
   way: { retune: 0, capo: 3, shapeKey: "A" },
 };
 const id = "0c7c2c75-25bf-4ac9-9b28-1b8a37a4b1a0";
-const now = new Date("2026-03-05T19:30:00Z");
+const now = new Date("2026-03-05T12:30:00Z");
 
 test("a choice becomes a decision that the contract accepts", () => {
   const made = decide(choice, null, () => id, now);
-  expect(decisionContract.parse(made)).toEqual({ ...choice, id, decidedAt: "2026-03-05T19:30:00.000Z" });
+  expect(decisionContract.parse(made)).toEqual({ ...choice, id, decidedAt: "2026-03-05T12:30:00.000Z" });
 });
 
 test("a new choice takes the place of the one before", () => {

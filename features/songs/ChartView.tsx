@@ -5,7 +5,8 @@ import { colors } from "@/features/ui/theme";
 import { webProps, webStyle } from "@/features/ui/webStyle";
 import { glyphs } from "@/shared/music/pitch";
 import type { Chart, ChartLine, ChartSection } from "@/shared/songs/chart";
-import { chartCells, type PlacedChord } from "./chartCells";
+import type { ChartToken } from "@/shared/songs/chordLine";
+import { chartCells } from "./chartCells";
 
 export interface ChartViewProps {
   chart: Chart;
@@ -59,19 +60,19 @@ function Line({ line, size }: { line: ChartLine; size: number }) {
 }
 
 /** One line: cells side by side that wrap as wholes. The chord stands before its words in the document, as it is read. */
-function Row({ lyrics, chords, size }: { lyrics: string; chords: readonly PlacedChord[]; size: number }) {
+function Row({ lyrics, chords, size }: { lyrics: string; chords: readonly ChartToken[]; size: number }) {
   const sung = lyrics.trim() !== "";
   return (
-    <View style={{ flexDirection: "row", flexWrap: "wrap", marginBottom: 3 }}>
+    <View style={{ flexDirection: "row", flexWrap: "wrap", alignItems: "flex-end", marginBottom: 3 }}>
       {chartCells(lyrics, chords).map((cell, index) => (
         <View key={index} style={webStyle({ maxWidth: "100%" })}>
-          {chords.length > 0 && (
+          {cell.chords.length > 0 && (
             <View style={[{ height: size * 1.35 }, webStyle({ fontSize: size, position: "relative" })]}>
               {cell.chords.map((chord) => (
                 <Text
                   key={chord.column}
                   variant="monoBold"
-                  tone="plum"
+                  tone={chord.kind === "chord" || chord.kind === "no-chord" ? "plum" : "soft"}
                   style={[
                     { position: "absolute", bottom: 0, fontSize: size, lineHeight: size * 1.2 },
                     webStyle({ left: `${chord.column}ch`, whiteSpace: "pre" }),

@@ -48,7 +48,6 @@ export function EditScreen({ song, onSaved }: EditScreenProps) {
       frame={(fields, submit) => (
         <Screen
           title={song ? "Edit the song" : "Add a song"}
-          {...(song ? { subtitle: song.title } : null)}
           crumb={song ? { label: song.title, href: { pathname: "/songs/[id]", params: { id: song.id } } } : { label: "Songs", href: "/songs" }}
           wide
           footer={<Button small={!phone} label="Save the song" busy={save.isPending} onPress={submit} testID="save-song" />}

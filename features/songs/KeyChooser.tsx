@@ -38,7 +38,7 @@ export function KeyChooser({ finding, chosen, onChoose }: KeyChooserProps) {
         <View role="list" style={{ gap: 2 }}>
           {finding.reasons.map((reason) => (
             <Text role="listitem" key={reason} variant="small">
-              {glyphs(reason)}
+              {reason}
             </Text>
           ))}
         </View>

@@ -31,6 +31,8 @@ export interface SongScreenProps {
   target: TargetKey | null;
   /** the key in hand, or what is missing for one */
   card: ReactNode;
+  /** when and why the key was decided, on the phone */
+  decided: ReactNode;
   /** middle and right column of the wide page */
   keys: ReactNode;
   ways: ReactNode;
@@ -43,11 +45,13 @@ export interface SongScreenProps {
 /** From this width on chart, keys and ways stand in three columns. */
 const threeColumnsFrom = 1400;
 
-export function SongScreen({ song, target, card, keys, ways, use, onRemove, removal }: SongScreenProps) {
+export function SongScreen({ song, target, card, decided, keys, ways, use, onRemove, removal }: SongScreenProps) {
   const layout = useLayout();
   const { width } = useWindowDimensions();
-  const [asWritten, setAsWritten] = useState(false);
+  const [turned, setAsWritten] = useState<boolean | null>(null);
   const wide = layout === "wide";
+  // The wide page shows key and ways beside the chart, so it is shown in that key; the phone waits for a decision.
+  const asWritten = turned ?? (!wide && target?.decided !== true);
   const moved = target !== null && song.writtenKey !== null && target.key.tonic !== song.writtenKey.tonic;
   const to = moved && !asWritten ? target.key : null;
   const params = { id: song.id };
@@ -97,7 +101,7 @@ export function SongScreen({ song, target, card, keys, ways, use, onRemove, remo
   return (
     <Screen
       {...screen}
-      subtitle={headWords(song)}
+      large
       footer={
         <View style={{ flexDirection: "row", gap: 10 }}>
           <LinkButton kind="secondary" label="Keys" href={{ pathname: "/songs/[id]/keys", params }} style={{ flexGrow: 1 }} testID="to-keys" />
@@ -105,8 +109,9 @@ export function SongScreen({ song, target, card, keys, ways, use, onRemove, remo
         </View>
       }
     >
-      <View style={{ gap: 14, marginTop: 6 }}>
+      <View style={{ gap: 14 }}>
         {card}
+        {decided}
         <View style={{ flexDirection: "row", flexWrap: "wrap", alignItems: "center", justifyContent: "space-between", gap: 8 }}>
           {moved && song.writtenKey && (
             <Segmented

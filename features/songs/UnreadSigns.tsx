@@ -23,7 +23,7 @@ export function UnreadSigns({ signs }: { signs: readonly UnreadSign[] }) {
       </View>
       {more > 0 && <Text variant="small">{`and ${more} more`}</Text>}
       <Text variant="small" tone="soft">
-        They stay as they are and are not moved into another key.
+        {signs.length === 1 ? "It stays as it is and is not moved into another key." : "They stay as they are and are not moved into another key."}
       </Text>
     </Notice>
   );

@@ -5,23 +5,23 @@ export interface PlacedChord {
 }
 
 /** A stretch of a chart line that never breaks: its words and every chord that stands over them. */
-export interface ChartCell {
+export interface ChartCell<Chord extends PlacedChord = PlacedChord> {
   /** the words with their blanks, padded to `width` */
   text: string;
   /** columns taken, blanks behind the last word included */
   width: number;
   /** chords, their columns counted from the start of the cell */
-  chords: PlacedChord[];
+  chords: Chord[];
 }
 
 /**
  * Cuts a line into cells at which it may wrap. A chord stays over its syllable in whatever row the cell lands,
  * and a chord longer than its word keeps the next word beside it, so that columns hold inside each row.
  */
-export function chartCells(lyrics: string, chords: readonly PlacedChord[]): ChartCell[] {
+export function chartCells<Chord extends PlacedChord>(lyrics: string, chords: readonly Chord[]): ChartCell<Chord>[] {
   const end = Math.max(lyrics.length, ...chords.map((chord) => chord.column + chord.text.length), 0);
   const line = lyrics.padEnd(end);
-  const cells: ChartCell[] = [];
+  const cells: ChartCell<Chord>[] = [];
   let start = 0;
   for (const stop of breaks(line, chords)) {
     const text = line.slice(start, stop);
@@ -31,7 +31,7 @@ export function chartCells(lyrics: string, chords: readonly PlacedChord[]): Char
       width: stop - start,
       chords: chords
         .filter((chord) => chord.column >= from && chord.column < stop)
-        .map((chord) => ({ column: chord.column - from, text: chord.text })),
+        .map((chord) => ({ ...chord, column: chord.column - from })),
     });
     start = stop;
   }

@@ -20,5 +20,6 @@ export function foundWords(finding: KeyFinding | null): string {
   if (finding === null) return "It is found as soon as there are a few chords or a melody.";
   const other = glyphs(keyWords(finding.runnerUp));
   if (finding.margin < narrow) return `It could be this or ${other}. Listen for the note the song comes home to.`;
-  return `Found by what you gave. The next likely is ${other}.`;
+  const sure = finding.confidence >= 0.8 ? "Sure" : finding.confidence >= 0.5 ? "Fairly sure" : "Not very sure";
+  return `${sure}. The next likely is ${other}.`;
 }

@@ -1,5 +1,5 @@
 import { useId, useState, type CSSProperties } from "react";
-import { setAccidentals } from "./accidentals";
+import { setSigns } from "./textSigns";
 import { Icon } from "./Icon";
 import { colors, fonts } from "./theme";
 
@@ -15,14 +15,22 @@ export interface SelectProps<Value extends string> {
 }
 
 /** One of many from a list that the browser opens itself. The chosen one is set by the page, because a list sets no accidentals. */
-export function Select<Value extends string>({ label, options, value, onChange, inline = false, error, testID }: SelectProps<Value>) {
+export function Select<Value extends string>({
+  label,
+  options,
+  value,
+  onChange,
+  inline = false,
+  error,
+  testID,
+}: SelectProps<Value>) {
   const id = useId();
   const [focused, setFocused] = useState(false);
   const shown = options.find((option) => option.value === value)?.label ?? "";
   const list = (
     <span style={{ position: "relative", ...(inline ? inWords(focused) : inField(focused, error !== undefined)) }}>
       <span aria-hidden style={{ overflow: "hidden", textOverflow: "ellipsis", whiteSpace: "nowrap" }}>
-        {setAccidentals(shown)}
+        {setSigns(shown)}
       </span>
       {!inline && <Icon name="down" size={20} color={colors.inkSoft} />}
       <select
@@ -35,7 +43,15 @@ export function Select<Value extends string>({ label, options, value, onChange, 
         onChange={(event) => onChange(event.target.value as Value)}
         onFocus={() => setFocused(true)}
         onBlur={() => setFocused(false)}
-        style={{ position: "absolute", inset: 0, width: "100%", height: "100%", opacity: 0, cursor: "pointer", font: `400 16px/22px ${fonts.text}` }}
+        style={{
+          position: "absolute",
+          inset: 0,
+          width: "100%",
+          height: "100%",
+          opacity: 0,
+          cursor: "pointer",
+          font: `400 16px/22px ${fonts.text}`,
+        }}
       >
         {options.map((option) => (
           <option key={option.value} value={option.value}>
@@ -53,7 +69,11 @@ export function Select<Value extends string>({ label, options, value, onChange, 
       </label>
       {list}
       {error !== undefined && (
-        <span id={`${id}-note`} aria-live="polite" style={{ font: `400 12px/16px ${fonts.text}`, color: colors.brick, display: "flex", gap: 5 }}>
+        <span
+          id={`${id}-note`}
+          aria-live="polite"
+          style={{ font: `400 12px/16px ${fonts.text}`, color: colors.brick, display: "flex", gap: 5 }}
+        >
           <Icon name="warning" size={16} color={colors.brick} />
           {error}
         </span>

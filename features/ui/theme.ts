@@ -92,6 +92,8 @@ input:focus-visible,textarea:focus-visible,select:focus-visible{outline:none}
 input::placeholder,textarea::placeholder{color:var(--inkSoft);opacity:1}
 span.mu{font-family:${fonts.music};font-weight:400;font-size:1.16em;line-height:0;position:relative;top:-.14em;margin:0 .01em;-webkit-text-stroke:.022em currentColor}
 span.mu.fl{top:-.09em}
+span.tri{display:inline-block;width:.82em;height:.68em;overflow:hidden;text-indent:-9em;white-space:nowrap;background:currentColor;clip-path:polygon(0 0,100% 0,50% 100%)}
+span.tri.up{clip-path:polygon(0 100%,100% 100%,50% 0)}
 [data-mono] span.mu{display:inline-block;width:.522em;margin:0;text-align:center}
 a{color:inherit;text-decoration:none}
 form{margin:0}

@@ -35,15 +35,15 @@ export function WayCard({ way, instrument, chosen, radio, onChoose }: WayCardPro
       >
         <View style={{ flexShrink: 1 }}>
           <Text variant="strong" nativeID={`${id}-title`} style={{ lineHeight: 20 }}>
-            {glyphs(way.title)}
+            {way.title}
           </Text>
           <Text variant="small" tone="soft" nativeID={`${id}-cost`} style={{ lineHeight: 19, marginTop: 2 }}>
-            {glyphs(way.cost)}
+            {way.cost}
           </Text>
         </View>
         <RadioDot on={chosen} />
       </Pressable>
-      <View style={webStyle({ display: "grid", gridTemplateColumns: "repeat(auto-fill, minmax(72px, 1fr))", rowGap: 10, marginTop: 6 })}>
+      <View style={webStyle({ display: "grid", gridTemplateColumns: "repeat(auto-fill, minmax(80px, 1fr))", rowGap: 10, marginTop: 6 })}>
         {way.chords.map((chord) => (
           <Grid key={chord.written} chord={chord} way={way} instrument={instrument} moved={moved} />
         ))}
@@ -64,6 +64,7 @@ function Grid({ chord, way, instrument, moved }: { chord: WayChord; way: Way; in
           strings={instrument.strings.length}
           capo={way.capo}
           leftHanded={instrument.leftHanded}
+          stringNames={instrument.strings.map(({ note }, index) => (way.strings[index]?.to ?? note).replace(/-?\d+$/, ""))}
           {...sounds}
         />
       </View>
@@ -87,7 +88,7 @@ function Cautions({ texts }: { texts: readonly string[] }) {
         <View key={text} style={{ flexDirection: "row", gap: 8 }}>
           <Icon name="warning" size={20} color={colors.honeyText} />
           <Text variant="tiny" style={{ flexShrink: 1 }}>
-            {glyphs(text)}
+            {text}
           </Text>
         </View>
       ))}

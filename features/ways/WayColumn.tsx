@@ -19,18 +19,41 @@ export interface WayColumnProps {
 export function WayColumn({ songId, target, instrument, list, error }: WayColumnProps) {
   return (
     <View testID="way-pane">
-      <View style={{ flexDirection: "row", flexWrap: "wrap", justifyContent: "space-between", alignItems: "baseline", columnGap: 12, minHeight: 28, marginBottom: 10 }}>
+      <View
+        style={{
+          flexDirection: "row",
+          flexWrap: "wrap",
+          justifyContent: "space-between",
+          alignItems: "baseline",
+          columnGap: 12,
+          minHeight: 28,
+          marginBottom: 10,
+        }}
+      >
         <Heading level={2}>{target ? `Ways to play ${target.sign}` : "Ways to play it"}</Heading>
         <Text variant="small" tone="soft" style={{ fontSize: 13 }}>
           {instrument}
         </Text>
       </View>
-      {error && <Notice kind="error" title="This is not saved">{`${error.message} Your choice is still here; try again.`}</Notice>}
+      {error && (
+        <Notice
+          kind="error"
+          title="This is not saved"
+        >{`${error.message} Your choice is still here; try again.`}</Notice>
+      )}
       {list}
       {target && (
-        <Link href={{ pathname: "/songs/[id]/ways", params: { id: songId, key: target.tonic, shift: String(target.shift) } }} style={webStyle(link)}>
-          All ways, wishes and instruments
-        </Link>
+        <View style={{ marginTop: 12 }}>
+          <Link
+            href={{
+              pathname: "/songs/[id]/ways",
+              params: { id: songId, key: target.tonic, shift: String(target.shift) },
+            }}
+            style={webStyle(link)}
+          >
+            All ways, wishes and instruments
+          </Link>
+        </View>
       )}
     </View>
   );

@@ -8,7 +8,7 @@ import { Skeleton } from "@/features/ui/Skeleton";
 import type { Instrument } from "@/shared/instruments/instrument";
 import type { Way } from "@/shared/ways/way";
 import { WayList } from "./WayList";
-import { takeLabel, wayKept } from "./wayWords";
+import { takeLabel, takeLabelIn, wayKept } from "./wayWords";
 
 /** What is asked of a search that runs on this device. */
 export interface WaySearch {
@@ -28,6 +28,8 @@ export interface WayPaneProps {
   kept: Pick<Way, "retune" | "capo" | "shapeKey"> | null;
   saving: boolean;
   onUse: (way: Way) => void;
+  /** name of the key, where the page's head does not say it */
+  sign?: string | undefined;
   /** how many ways are shown at first; all unless told otherwise */
   most?: number;
   /** where the ways stand, and where the button that takes one */
@@ -35,7 +37,7 @@ export interface WayPaneProps {
 }
 
 /** The ways into one key, one of them chosen, and the button that keeps it. */
-export function WayPane({ songId, into, hasChords, search, instrument, kept, saving, onUse, most, children }: WayPaneProps) {
+export function WayPane({ songId, into, hasChords, search, instrument, kept, saving, onUse, sign, most, children }: WayPaneProps) {
   const [chosen, setChosen] = useState<string | null>(null);
   const found = search.data;
   const keptWay = found ? wayKept(found, kept) : null;
@@ -67,9 +69,10 @@ export function WayPane({ songId, into, hasChords, search, instrument, kept, sav
       use: null,
       list: <EmptyState title="No way on this instrument" text="None of the song's chords can be played on it in this key. Try another instrument or another key." />,
     });
+  const label = sign === undefined ? takeLabel(way) : takeLabelIn(sign, way);
   return children({
     list: <WayList ways={ways} instrument={instrument} chosen={at} onChoose={(index) => setChosen(idOf(into, ways[index]))} />,
-    use: <Button label={isKept ? `${takeLabel(way).replace("Use", "You use")}` : takeLabel(way)} busy={saving} disabled={isKept} onPress={() => onUse(way)} testID="use-way" />,
+    use: <Button label={isKept ? label.replace("Use", "You use") : label} busy={saving} disabled={isKept} onPress={() => onUse(way)} testID="use-way" />,
   });
 }
 

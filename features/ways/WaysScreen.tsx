@@ -3,7 +3,6 @@ import { View } from "react-native";
 import { Heading } from "@/features/ui/Heading";
 import { Notice } from "@/features/ui/Notice";
 import { Screen } from "@/features/ui/Screen";
-import { Text } from "@/features/ui/Text";
 import { colors } from "@/features/ui/theme";
 import { useLayout } from "@/features/ui/useLayout";
 import { WishPanel } from "./WishPanel";
@@ -46,7 +45,7 @@ export function WaysScreen({ song, sign, instrument, chooser, list, use, chart, 
   return (
     <Screen
       title={`Ways to play it in ${sign}`}
-      subtitle={phone ? instrument : `${song.title} · ${instrument}`}
+      subtitle={instrument}
       crumb={{ label: song.title, href: { pathname: "/songs/[id]", params: { id: song.id } } }}
       wide
       footer={use ?? undefined}
@@ -63,17 +62,5 @@ export function WaysScreen({ song, sign, instrument, chooser, list, use, chart, 
         </View>
       )}
     </Screen>
-  );
-}
-
-/** That this is what is played now, and the way back. */
-export function KeptLine({ words, undo }: { words: string; undo: ReactNode }) {
-  return (
-    <View style={{ flexDirection: "row", flexWrap: "wrap", alignItems: "center", columnGap: 12 }}>
-      <Text variant="small" tone="soft" style={{ flexShrink: 1 }}>
-        {words}
-      </Text>
-      {undo}
-    </View>
   );
 }

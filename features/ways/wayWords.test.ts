@@ -1,5 +1,5 @@
 import type { Way } from "@/shared/ways/way";
-import { difficultyWord, shortCost, shortWay, takeLabel, wayKept } from "./wayWords";
+import { difficultyWord, shortCost, shortWay, takeLabel, takeLabelIn, wayKept } from "./wayWords";
 
 const way = (retune: number, capo: number, shapeKey: string): Way => ({
   kind: "as-is",
@@ -24,6 +24,15 @@ test.each([
   [way(1, 0, "F#"), "Use this tuning", "Retuned 1 up, shapes of F♯"],
 ])("%# has its words", (each, label, short) => {
   expect([takeLabel(each), shortWay(each)]).toEqual([label, short]);
+});
+
+test("beside no key's name the button says the key too", () => {
+  expect([way(0, 0, "C"), way(0, 3, "A"), way(-2, 0, "D"), way(-1, 1, "Bb")].map((each) => takeLabelIn("C", each))).toEqual([
+    "Use C as tuned",
+    "Use C with capo 3",
+    "Use C in this tuning",
+    "Use C in this tuning, capo 1",
+  ]);
 });
 
 test("the cost says how hard it is and what is retuned", () => {

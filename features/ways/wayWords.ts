@@ -9,6 +9,12 @@ export function takeLabel({ retune, capo }: Moves): string {
   return capo === 0 ? "Use this tuning" : `Use this tuning and capo ${capo}`;
 }
 
+/** The same where the key is not said beside it. */
+export function takeLabelIn(sign: string, { retune, capo }: Moves): string {
+  if (retune === 0) return capo === 0 ? `Use ${sign} as tuned` : `Use ${sign} with capo ${capo}`;
+  return capo === 0 ? `Use ${sign} in this tuning` : `Use ${sign} in this tuning, capo ${capo}`;
+}
+
 /** A way in the few words that a table row has room for. */
 export function shortWay({ retune, capo, shapeKey }: Moves): string {
   const shapes = `shapes of ${glyphs(shapeKey)}`;

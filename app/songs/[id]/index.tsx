@@ -1,8 +1,9 @@
 import { useQuery } from "@tanstack/react-query";
 import { useLocalSearchParams, useRouter } from "expo-router";
 import { useMemo, useState } from "react";
-import { stringWords } from "@/features/instruments/myInstruments";
+import { instrumentWords } from "@/features/instruments/myInstruments";
 import { useInstrument } from "@/features/instruments/useInstrument";
+import { DecidedLine } from "@/features/keys/DecidedLine";
 import { KeyPane } from "@/features/keys/KeyPane";
 import { MyKeyCard } from "@/features/keys/MyKeyCard";
 import { songChords, writtenKeyOf } from "@/features/keys/songKeys";
@@ -56,6 +57,7 @@ function SongPage({ song }: { song: Song }) {
       kept={mine?.instrument === instrument.id ? mine.way : null}
       saving={keys.saving}
       onUse={(way) => take && keys.take({ ...take, way })}
+      sign={key ? glyphs(keySign(key)) : undefined}
       most={3}
     >
       {({ list, use }) => (
@@ -63,8 +65,9 @@ function SongPage({ song }: { song: Song }) {
           song={song}
           target={key && { key, shift, decided: mine !== null }}
           card={keys.inHand && <MyKeyCard songId={song.id} inHand={keys.inHand} voice={keys.voice} />}
+          decided={keys.decision && <DecidedLine decision={keys.decision} saving={keys.saving} onUndo={keys.undo} />}
           keys={<KeyPane songId={song.id} hasTune={song.tune !== null} keys={keys} voiceName={voice?.name ?? null} selected={row} onSelect={(chosen) => setLooked(chosen.shift)} />}
-          ways={<WayColumn songId={song.id} target={key && { sign: glyphs(keySign(key)), tonic: key.tonic, shift }} instrument={`${instrument.name}, ${stringWords(instrument)}`} list={list} error={keys.error} />}
+          ways={<WayColumn songId={song.id} target={key && { sign: glyphs(keySign(key)), tonic: key.tonic, shift }} instrument={instrumentWords(instrument)} list={list} error={keys.error} />}
           use={use}
           onRemove={() => remove.mutate(song.id, { onSuccess: () => router.replace("/songs") })}
           removal={remove}

@@ -2,19 +2,18 @@ import { useQuery } from "@tanstack/react-query";
 import { useLocalSearchParams } from "expo-router";
 import { useMemo } from "react";
 import { InstrumentSelect } from "@/features/instruments/InstrumentSelect";
-import { stringWords } from "@/features/instruments/myInstruments";
+import { instrumentWords } from "@/features/instruments/myInstruments";
 import { useInstrument } from "@/features/instruments/useInstrument";
-import { decidedOn } from "@/features/keys/decide";
+import { DecidedLine } from "@/features/keys/DecidedLine";
 import { askedKey, songChords, writtenKeyOf } from "@/features/keys/songKeys";
 import { useSongKeys } from "@/features/keys/useSongKeys";
 import { MovedChart } from "@/features/songs/MovedChart";
 import { SongState } from "@/features/songs/SongState";
 import { songQueries } from "@/features/songs/songQueries";
-import { Button } from "@/features/ui/Button";
 import { useSingingVoice } from "@/features/voice/useSingingVoice";
 import { WayPane } from "@/features/ways/WayPane";
 import { wayQueries } from "@/features/ways/wayQueries";
-import { KeptLine, WaysScreen } from "@/features/ways/WaysScreen";
+import { WaysScreen } from "@/features/ways/WaysScreen";
 import { useWishes } from "@/features/ways/wishes";
 import type { Song } from "@/shared/contract/song";
 import { keySign } from "@/shared/music/keyWords";
@@ -56,12 +55,12 @@ function Ways({ song }: { song: Song }) {
         <WaysScreen
           song={song}
           sign={glyphs(keySign(key))}
-          instrument={`${instrument.name}, ${stringWords(instrument)}`}
+          instrument={instrumentWords(instrument)}
           chooser={<InstrumentSelect owned={owned} value={instrument.id} onChange={choose} />}
           {...parts}
           chart={<MovedChart song={song} to={key} level={3} />}
           error={keys.error ?? error}
-          kept={mine && <KeptLine words={`Your key since ${decidedOn(mine)}. ${mine.reason}`} undo={<Button kind="text" small label="Undo" accessibleName="Undo my key" onPress={keys.undo} testID="undo-key" />} />}
+          kept={mine && <DecidedLine decision={mine} saving={keys.saving} onUndo={keys.undo} />}
         />
       )}
     </WayPane>

@@ -1,0 +1,85 @@
+import { fireEvent, render, screen, within } from "@testing-library/react";
+import { useState } from "react";
+import type { Song } from "@/shared/contract/song";
+import { sortedRows, wholeVoice, type KeyOrder, type KeyRow } from "./keyRows";
+import { KeyTable, type TableWay } from "./KeyTable";
+import { keyRowsOf } from "./songKeys";
+
+const song: Song = {
+  id: "7f0b6f0e-6a51-4a8e-9a53-0a3d8f6f3f01",
+  title: "Slack Water",
+  chart: "G    C   D  Em\nLow tide and still",
+  writtenKey: { tonic: "G", mode: "major" },
+  tune: { kind: "span", lowMidi: 62, highMidi: 76, home: "G" },
+  beatsPerBar: null,
+  tempo: null,
+  demo: null,
+  createdAt: "2026-03-05T19:00:00.000Z",
+};
+const singing = { range: { lowMidi: 51, highMidi: 74 }, comfort: { lowMidi: 55, highMidi: 70 } };
+const rows = keyRowsOf(song, singing) ?? [];
+
+function Page({ wayOf = () => null }: { wayOf?: (row: KeyRow) => TableWay }) {
+  const [selected, setSelected] = useState<KeyRow | null>(rows[0] ?? null);
+  const [order, setOrder] = useState<KeyOrder>("score");
+  return (
+    <KeyTable
+      rows={sortedRows(rows, order)}
+      voice={wholeVoice(singing)}
+      selected={selected}
+      onSelect={setSelected}
+      order={order}
+      onOrder={setOrder}
+      wayOf={wayOf}
+      instrument="A D F♯"
+    />
+  );
+}
+
+const bodyRows = () => within(screen.getByRole("table")).getAllByRole("row").slice(1);
+const signOf = (row: HTMLElement) => within(row).getByRole("rowheader").firstElementChild?.textContent;
+
+test("it is a real table: a caption, eight column heads, twelve rows with row heads", () => {
+  render(<Page />);
+  expect(screen.getByRole("table", { name: /All twelve keys/ })).toBeTruthy();
+  expect(screen.getAllByRole("columnheader")).toHaveLength(8);
+  expect(bodyRows()).toHaveLength(12);
+  expect(signOf(bodyRows()[0]!)).toBe(rows[0]?.sign);
+});
+
+test("each row has its score, its picture in words, and chords in its key", () => {
+  render(<Page />);
+  const inC = bodyRows().find((row) => signOf(row) === "C")!;
+  expect(inC.textContent).toContain("7 down");
+  expect(inC.textContent).toContain(String(rows.find((row) => row.sign === "C")?.score));
+  expect(within(inC).getByRole("img").getAttribute("aria-label")).toMatch(/G3/);
+  expect(within(inC).getByText("Am")).toBeTruthy();
+});
+
+test("the heads sort, and say which one does", () => {
+  render(<Page />);
+  expect(screen.getByRole("columnheader", { name: /Score/ }).getAttribute("aria-sort")).toBe("descending");
+  fireEvent.click(screen.getByRole("button", { name: /Key, semitones/ }));
+  expect(screen.getByRole("columnheader", { name: /Key, semitones/ }).getAttribute("aria-sort")).toBe("ascending");
+  expect(screen.getByRole("columnheader", { name: /Score/ }).getAttribute("aria-sort")).toBeNull();
+  const moves = bodyRows().map((row) => Math.abs(rows.find((each) => each.sign === signOf(row))?.shift ?? 99));
+  expect(moves).toEqual([...moves].sort((a, b) => a - b));
+});
+
+test("a key is chosen by its radio button or anywhere in its row", () => {
+  render(<Page />);
+  const [, second, third] = screen.getAllByRole("radio") as HTMLInputElement[];
+  fireEvent.click(second!);
+  expect(second!.checked).toBe(true);
+  fireEvent.click(bodyRows()[2]!);
+  expect(third!.checked).toBe(true);
+  expect(second!.checked).toBe(false);
+});
+
+test("a way that is still searched, one found and none are told apart", () => {
+  const [first, second] = rows;
+  render(<Page wayOf={(row) => (row === first ? undefined : row === second ? { title: "Capo 5, shapes of G", cost: "easy, nothing retuned" } : null)} />);
+  expect(bodyRows()[0]?.textContent).toContain("Searching");
+  expect(bodyRows()[1]?.textContent).toContain("Capo 5, shapes of Geasy, nothing retuned");
+  expect(bodyRows()[2]?.textContent).toContain("None found");
+});

@@ -119,7 +119,9 @@ function search(neck: Neck, needs: ChordNeeds, visit: (frets: (number | null)[])
   const mostAbove = 5;
   const allowed = (string: number, fret: number) => {
     const raised = neck.semitones[fret];
-    return raised != null && ((needs.allowed >> ((neck.open[string]! + raised) % 12)) & 1) === 1;
+    return (
+      raised !== undefined && raised !== null && ((needs.allowed >> ((neck.open[string]! + raised) % 12)) & 1) === 1
+    );
   };
   const tone = (string: number, fret: number) => 1 << ((neck.open[string]! + neck.semitones[fret]!) % 12);
   for (let base = 0; base <= neck.maxFret; base++) {

@@ -1,4 +1,4 @@
-import Svg, { Circle, G, Line, Rect } from "react-native-svg";
+import Svg, { Circle, G, Line, Path, Rect } from "react-native-svg";
 import type { KeyMark, SingingVoice } from "@/shared/keys/keyScore";
 import { glyphs, noteName, type Spelling } from "@/shared/music/pitch";
 import { SvgLabel } from "@/features/ui/SvgLabel";
@@ -144,31 +144,62 @@ export function KeySpan({
           </G>
         );
       })}
-      {first && (!fine || first.zone === "beyond") && (
-        <SvgLabel
-          x={x(first.midi) - thick - (fine ? 1 : 0)}
-          y={middle + 4}
-          size={fine ? 9 : 11.5}
-          family="mono"
-          anchor="end"
-          halo
+      {first && (
+        <EndName
+          x={x(first.midi) - thick}
+          direction={-1}
+          middle={middle}
+          words={fine ? "" : name(first.midi)}
+          arrow={first.zone === "beyond" && sideOf(first.midi, voice) === "below" ? "down" : null}
           fill={tone(first)}
-        >
-          {`${first.zone === "beyond" && sideOf(first.midi, voice) === "below" ? "▼ " : ""}${fine ? "" : name(first.midi)}`.trim()}
-        </SvgLabel>
+        />
       )}
-      {last && (!fine || last.zone === "beyond") && (
-        <SvgLabel
-          x={x(last.midi) + thick + (fine ? 1 : 0)}
-          y={middle + 4}
-          size={fine ? 9 : 11.5}
-          family="mono"
-          halo
+      {last && (
+        <EndName
+          x={x(last.midi) + thick}
+          direction={1}
+          middle={middle}
+          words={fine ? "" : name(last.midi)}
+          arrow={last.zone === "beyond" && sideOf(last.midi, voice) === "above" ? "up" : null}
           fill={tone(last)}
-        >
-          {`${fine ? "" : name(last.midi)}${last.zone === "beyond" && sideOf(last.midi, voice) === "above" ? " ▲" : ""}`.trim()}
-        </SvgLabel>
+        />
       )}
     </Svg>
+  );
+}
+
+interface EndNameProps {
+  x: number;
+  direction: 1 | -1;
+  middle: number;
+  words: string;
+  arrow: "up" | "down" | null;
+  fill: string;
+}
+
+const letterWidth = 6.9;
+
+/** Name of an outer note, and outside it the arrow of one that lies beyond. */
+function EndName({ x, direction, middle, words, arrow, fill }: EndNameProps) {
+  const tip = x + direction * (words === "" ? 1 : words.length * letterWidth + 6);
+  const left = direction === 1 ? tip : tip - 7;
+  const rise = arrow === "up" ? -5.6 : 5.6;
+  return (
+    <G>
+      {words !== "" && (
+        <SvgLabel
+          x={x}
+          y={middle + 4}
+          size={11.5}
+          family="mono"
+          anchor={direction === 1 ? "start" : "end"}
+          halo
+          fill={fill}
+        >
+          {words}
+        </SvgLabel>
+      )}
+      {arrow && <Path d={`M${left} ${middle - rise / 2}h7l-3.5 ${rise}z`} fill={fill} />}
+    </G>
   );
 }

@@ -123,6 +123,7 @@ describe("KeySpan", () => {
     const { container } = render(
       <KeySpan voice={voice} marks={marks} scale={{ low: 48, high: 78 }} spelling="flats" />,
     );
-    expect(Array.from(container.querySelectorAll("text")).map((text) => text.textContent)).toEqual(["C4", "D5 ▲"]);
+    expect(Array.from(container.querySelectorAll("text")).map((text) => text.textContent)).toEqual(["C4", "D5"]);
+    expect(container.querySelectorAll('path[fill="var(--brick)"]')).toHaveLength(1);
   });
 });

@@ -1,6 +1,6 @@
 import { forwardRef, type ReactNode } from "react";
 import { Text as NativeText, type StyleProp, type TextStyle } from "react-native";
-import { setAccidentals } from "./accidentals";
+import { setSigns } from "./textSigns";
 import { colors, fonts } from "./theme";
 import { webProps, webStyle } from "./webStyle";
 
@@ -38,7 +38,7 @@ export const Heading = forwardRef<NativeText, HeadingProps>(function Heading(
         style,
       ]}
     >
-      {setAccidentals(children)}
+      {setSigns(children)}
     </NativeText>
   );
 });

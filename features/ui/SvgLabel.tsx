@@ -1,6 +1,6 @@
 import { Fragment } from "react";
 import { Text as SvgText, TSpan } from "react-native-svg";
-import { splitAccidentals } from "./accidentals";
+import { splitSigns } from "./textSigns";
 import { colors, fonts } from "./theme";
 import { webProps } from "./webStyle";
 
@@ -43,8 +43,8 @@ export function SvgLabel({
       textAnchor={anchor}
       {...webProps(rim)}
     >
-      {splitAccidentals(children).map(({ text, accidental }, index) =>
-        accidental ? (
+      {splitSigns(children).map(({ text, kind }, index) =>
+        kind === "accidental" ? (
           <Fragment key={index}>
             <TSpan
               fontFamily={fonts.music}

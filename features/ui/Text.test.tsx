@@ -1,12 +1,12 @@
 import { render, screen } from "@testing-library/react";
-import { splitAccidentals } from "./accidentals";
+import { splitSigns } from "./textSigns";
 import { fontFaceCss, musicRange } from "./fontFaces";
 import { Heading } from "./Heading";
 import { SvgLabel } from "./SvgLabel";
 import { Text } from "./Text";
 import { fonts, themeCss } from "./theme";
 
-describe("splitAccidentals", () => {
+describe("splitSigns", () => {
   it.each([
     ["F♯m", ["F", "♯", "m"]],
     ["B♭3 to F♯4", ["B", "♭", "3 to F", "♯", "4"]],
@@ -14,13 +14,13 @@ describe("splitAccidentals", () => {
     ["no sign", ["no sign"]],
     ["", []],
   ])("cuts %j at its accidentals", (text, parts) => {
-    expect(splitAccidentals(text).map((part) => part.text)).toEqual(parts);
+    expect(splitSigns(text).map((part) => part.text)).toEqual(parts);
   });
 
   it("loses no sign of the text", () => {
     const text = "♭B♭ ♯♮𝄪x";
     expect(
-      splitAccidentals(text)
+      splitSigns(text)
         .map((part) => part.text)
         .join(""),
     ).toBe(text);
@@ -37,14 +37,22 @@ describe("Text", () => {
     expect(themeCss).toContain(`span.mu{display:inline-block;font-family:${fonts.music}`);
   });
 
-  it("does the same in headings", () => {
+  it("draws ▲ and ▼, which no shipped font has, and keeps them as words", () => {
+    render(<Text testID="line">▲ 2 and ▼ 1</Text>);
+    const line = screen.getByTestId("line");
+    expect(line.textContent).toBe("▲ 2 and ▼ 1");
+    expect(Array.from(line.querySelectorAll("span.tri")).map((arrow) => arrow.className)).toEqual(["tri up", "tri"]);
+    expect(themeCss).toContain("span.tri.up{clip-path");
+  });
+
+  it("sets accidentals in headings too", () => {
     render(<Heading level={1}>Ways to play E♭</Heading>);
     const heading = screen.getByRole("heading", { level: 1 });
     expect(heading.tagName).toBe("H1");
     expect(heading.querySelector("span.mu")?.textContent).toBe("♭");
   });
 
-  it("does the same inside drawings", () => {
+  it("sets accidentals inside drawings too", () => {
     const { container } = render(
       <svg>
         <SvgLabel x={0} y={0}>

@@ -1,6 +1,6 @@
 import { createContext, useContext, type ReactNode } from "react";
 import { Text as NativeText, type StyleProp, type TextProps as NativeTextProps, type TextStyle } from "react-native";
-import { setAccidentals } from "./accidentals";
+import { setSigns } from "./textSigns";
 import { colors, fonts } from "./theme";
 import { webProps } from "./webStyle";
 
@@ -66,7 +66,7 @@ export function Text({ variant, tone, style, children, ...rest }: TextProps) {
         {...(mono ? webProps({ dataSet: { mono: "" } }) : null)}
         style={[kind && variants[kind], color && { color: tones[color] }, style]}
       >
-        {setAccidentals(children)}
+        {setSigns(children)}
       </NativeText>
     </InsideText.Provider>
   );

@@ -1,6 +1,6 @@
 import { Link, type Href } from "expo-router";
 import type { StyleProp, TextStyle } from "react-native";
-import { setAccidentals } from "./accidentals";
+import { setSigns } from "./textSigns";
 import { colors, fonts } from "./theme";
 import { webStyle } from "./webStyle";
 
@@ -39,7 +39,7 @@ export function TextLink({ href, children, size = 14, testID, style }: TextLinkP
         style,
       ]}
     >
-      {setAccidentals(children)}
+      {setSigns(children)}
     </Link>
   );
 }

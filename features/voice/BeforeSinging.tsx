@@ -20,7 +20,13 @@ export function BeforeSinging({ asking, onSing }: BeforeSingingProps) {
       crumb={{ label: "Voice", href: "/voice" }}
       footer={
         <>
-          <Button icon="mic" label={asking ? "Waiting for the microphone" : "Start singing"} busy={asking} onPress={onSing} testID="sing-start" />
+          <Button
+            icon="mic"
+            label={asking ? "Waiting for the microphone" : "Start singing"}
+            busy={asking}
+            onPress={onSing}
+            testID="sing-start"
+          />
           <LinkButton kind="text" label="Set notes by hand" href="/voice/by-hand" testID="sing-by-hand" />
         </>
       }
@@ -45,8 +51,8 @@ export function Cautions() {
     <Notice kind="caution" title="Sing at your ease">
       <Text variant="small">Stop if it hurts, tickles or turns hoarse.</Text>
       <Text variant="small" tone="soft">
-        If you are hoarse for more than about four weeks, see a doctor: so says the 2018 guideline on hoarseness of the American Academy of
-        Otolaryngology.
+        If you are hoarse for more than about four weeks, see a doctor: so says the 2018 guideline on hoarseness of the
+        American Academy of Otolaryngology.
       </Text>
     </Notice>
   );

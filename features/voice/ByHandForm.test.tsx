@@ -46,5 +46,10 @@ it("fills the chosen field by a tap on the ladder and moves a note by a semitone
 
 it("begins with the notes that the voice has", () => {
   open(jest.fn(), { range: { lowMidi: 53.2, highMidi: 71.8 }, comfort: { lowMidi: 55, highMidi: 69 } });
-  expect(["lowest", "highest", "comfortLow", "comfortTop"].map((name) => valueOf(`by-hand-${name}`))).toEqual(["F3", "C5", "G3", "A4"]);
+  expect(["lowest", "highest", "comfortLow", "comfortTop"].map((name) => valueOf(`by-hand-${name}`))).toEqual([
+    "F3",
+    "C5",
+    "G3",
+    "A4",
+  ]);
 });

@@ -34,7 +34,9 @@ const resolver: Resolver<ByHandFields> = (values) => {
   if (reading.ok) return { values, errors: {} };
   return {
     values: {},
-    errors: Object.fromEntries(Object.entries(reading.errors).map(([name, message]) => [name, { type: "note", message }])),
+    errors: Object.fromEntries(
+      Object.entries(reading.errors).map(([name, message]) => [name, { type: "note", message }]),
+    ),
   };
 };
 
@@ -51,7 +53,8 @@ export function ByHandForm({ voice, busy, refusal, onKeep }: ByHandFormProps) {
     setValue(name, noteName(midi), { shouldDirty: true });
     if (formState.isSubmitted || formState.errors[name]) void trigger();
   };
-  const step = (name: keyof ByHandFields, by: number) => set(name, (parseNoteName(getValues(name)) ?? startOf(name, values)) + by);
+  const step = (name: keyof ByHandFields, by: number) =>
+    set(name, (parseNoteName(getValues(name)) ?? startOf(name, values)) + by);
   const keep = handleSubmit((typed) => {
     const reading = readByHand(typed);
     if (reading.ok) onKeep(reading.voice);
@@ -92,7 +95,8 @@ export function ByHandForm({ voice, busy, refusal, onKeep }: ByHandFormProps) {
       )}
       <Button submit label="Keep these notes" busy={busy} onPress={() => undefined} testID="by-hand-keep" />
       <Text variant="small" tone="soft">
-        Type a letter and an octave: C4 is the C in the middle of a piano. Singing a few seconds finds the same notes for you.
+        Type a letter and an octave: C4 is the C in the middle of a piano. Singing a few seconds finds the same notes
+        for you.
       </Text>
     </Form>
   );

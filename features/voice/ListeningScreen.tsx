@@ -53,7 +53,12 @@ function NoteWords({ live }: { live: LiveSound }) {
   const note = noteNow(live.frames);
   return (
     <View style={{ flexDirection: "row", alignItems: "center", gap: 16, paddingTop: 8, minHeight: 60 }}>
-      <Text variant="number" style={{ lineHeight: 52, letterSpacing: -1, minWidth: 64 }} testID="note-now" aria-hidden={note === null}>
+      <Text
+        variant="number"
+        style={{ lineHeight: 52, letterSpacing: -1, minWidth: 64 }}
+        testID="note-now"
+        aria-hidden={note === null}
+      >
         {note ? noteWord(note.midi) : "–"}
       </Text>
       <View style={{ flexGrow: 1, flexShrink: 1 }}>
@@ -74,7 +79,15 @@ function LiveTrail({ live, height }: { live: LiveSound; height: number }) {
   const [width, setWidth] = useState(0);
   return (
     <View onLayout={({ nativeEvent }) => setWidth(nativeEvent.layout.width)} style={{ height }}>
-      {width > 0 && <PitchTrail frames={live.frames} now={Math.max(0, timeOf(live, nowMs) - lookAheadS)} width={width} height={height} testID="pitch-trail" />}
+      {width > 0 && (
+        <PitchTrail
+          frames={live.frames}
+          now={Math.max(0, timeOf(live, nowMs) - lookAheadS)}
+          width={width}
+          height={height}
+          testID="pitch-trail"
+        />
+      )}
     </View>
   );
 }
@@ -92,7 +105,11 @@ function TimeRow({ seconds }: { seconds: number }) {
       <Text variant="small" tone="soft" style={{ width: 44 }}>
         Time
       </Text>
-      <View role="img" aria-label={words} style={{ flexGrow: 1, flexShrink: 1, height: 8, borderRadius: 4, borderWidth: 1, borderColor: mixtures.rungC }}>
+      <View
+        role="img"
+        aria-label={words}
+        style={{ flexGrow: 1, flexShrink: 1, height: 8, borderRadius: 4, borderWidth: 1, borderColor: mixtures.rungC }}
+      >
         <View
           style={{
             position: "absolute",

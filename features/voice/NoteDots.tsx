@@ -11,11 +11,21 @@ export interface NoteDotsProps {
 export function NoteDots({ clear, all }: NoteDotsProps) {
   const columns = Math.min(12, Math.max(8, Math.ceil(all / 2)));
   return (
-    <View aria-hidden style={webStyle({ display: "grid", gridTemplateColumns: `repeat(${columns}, 9px)`, gap: 4, flexShrink: 0 })}>
+    <View
+      aria-hidden
+      style={webStyle({ display: "grid", gridTemplateColumns: `repeat(${columns}, 9px)`, gap: 4, flexShrink: 0 })}
+    >
       {Array.from({ length: Math.min(all, 3 * columns) }, (_, k) => (
         <View
           key={k}
-          style={{ width: 9, height: 9, borderRadius: 5, borderWidth: 1.5, borderColor: colors.ink, backgroundColor: k < clear ? colors.ink : "transparent" }}
+          style={{
+            width: 9,
+            height: 9,
+            borderRadius: 5,
+            borderWidth: 1.5,
+            borderColor: colors.ink,
+            backgroundColor: k < clear ? colors.ink : "transparent",
+          }}
         />
       ))}
     </View>

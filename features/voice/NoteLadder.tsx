@@ -45,7 +45,13 @@ export function NoteLadder({ values, active, onActive, onNote }: NoteLadderProps
       <Segmented label="Which note a tap sets" options={targets} value={active} onChange={onActive} />
       <ScrollView
         ref={scroll}
-        style={{ height: shownHeight, borderWidth: 1, borderColor: colors.line, borderRadius: sizes.radius, backgroundColor: colors.card }}
+        style={{
+          height: shownHeight,
+          borderWidth: 1,
+          borderColor: colors.line,
+          borderRadius: sizes.radius,
+          backgroundColor: colors.card,
+        }}
       >
         {rungs.map((midi) => {
           const natural = noteWord(midi).length === 2;
@@ -60,11 +66,24 @@ export function NoteLadder({ values, active, onActive, onNote }: NoteLadderProps
               onPress={() => onNote(midi)}
               style={{ height: rungHeight, flexDirection: "row", alignItems: "center", paddingHorizontal: 12, gap: 12 }}
             >
-              <Text variant="label" tone={on ? "plum" : natural ? "ink" : "soft"} style={{ width: 44, textAlign: "right", fontWeight: on ? "600" : "500" }}>
+              <Text
+                variant="label"
+                tone={on ? "plum" : natural ? "ink" : "soft"}
+                style={{ width: 44, textAlign: "right", fontWeight: on ? "600" : "500" }}
+              >
                 {noteWord(midi)}
               </Text>
-              <View style={{ width: 28, height: rungHeight, backgroundColor: inRange ? colors.lagoon : "transparent" }} />
-              <View style={{ flexGrow: 1, height: 1, backgroundColor: natural ? colors.inkSoft : colors.line, opacity: natural ? 0.5 : 1 }} />
+              <View
+                style={{ width: 28, height: rungHeight, backgroundColor: inRange ? colors.lagoon : "transparent" }}
+              />
+              <View
+                style={{
+                  flexGrow: 1,
+                  height: 1,
+                  backgroundColor: natural ? colors.inkSoft : colors.line,
+                  opacity: natural ? 0.5 : 1,
+                }}
+              />
               {on && <View style={{ width: 12, height: 12, borderRadius: 6, backgroundColor: colors.plum }} />}
             </Pressable>
           );

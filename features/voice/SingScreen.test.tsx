@@ -59,7 +59,9 @@ const report: TakeReport = {
   nextStep: "Try it in a song.",
   durationS: 9,
   f0: [],
-  notes: [{ start: 0, end: 1, midi: 64, steadinessCents: 10, vibrato: null, levelDb: -20, sustained: true, clear: true }],
+  notes: [
+    { start: 0, end: 1, midi: 64, steadinessCents: 10, vibrato: null, levelDb: -20, sustained: true, clear: true },
+  ],
   range: band(53, 72),
   comfort: band(55, 69),
   estimate: band(51, 74),
@@ -154,7 +156,14 @@ it.each([
   await open();
   await sing();
   await press("sing-stop");
-  await judged({ verdict, sentence: "Why it was not.", nextStep: "What to do.", range: null, comfort: null, estimate: null });
+  await judged({
+    verdict,
+    sentence: "Why it was not.",
+    nextStep: "What to do.",
+    range: null,
+    comfort: null,
+    estimate: null,
+  });
   expect(screen.getByRole("heading", { level: 1 }).textContent).toBe(title);
   expect(screen.getByText("Why it was not.")).toBeTruthy();
   expect(screen.getByText("What to do.")).toBeTruthy();

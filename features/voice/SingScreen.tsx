@@ -38,12 +38,24 @@ export function SingScreen({ onKept }: SingScreenProps) {
   );
 }
 
-function Step({ recorder, restoring, onKept }: { recorder: Recorder; restoring: boolean; onKept: SingScreenProps["onKept"] }) {
+function Step({
+  recorder,
+  restoring,
+  onKept,
+}: {
+  recorder: Recorder;
+  restoring: boolean;
+  onKept: SingScreenProps["onKept"];
+}) {
   const { state, live, sing, stop, leave, felt } = recorder;
   switch (state.step) {
     case "idle":
     case "asking":
-      return restoring ? <Waiting words="Looking for your last take" /> : <BeforeSinging asking={state.step === "asking"} onSing={sing} />;
+      return restoring ? (
+        <Waiting words="Looking for your last take" />
+      ) : (
+        <BeforeSinging asking={state.step === "asking"} onSing={sing} />
+      );
     case "listening":
     case "stopping":
       return <ListeningScreen live={live} seconds={state.seconds} stopping={state.step === "stopping"} onStop={stop} />;
@@ -87,7 +99,8 @@ function Result({ take, onAgain, onFelt, onKept }: ResultProps) {
   const keep = useKeepTake();
   const [first] = useState(() => newVoice("My voice"));
   const [choosing, setChoosing] = useState<"voice" | "songs" | null>(null);
-  const keepIn = (voice: Voice, next: "voice" | "songs") => keep.mutate({ heard: take, voice }, { onSuccess: () => onKept(next) });
+  const keepIn = (voice: Voice, next: "voice" | "songs") =>
+    keep.mutate({ heard: take, voice }, { onSuccess: () => onKept(next) });
   const startKeeping = (next: "voice" | "songs") => (many ? setChoosing(next) : keepIn(first, next));
   const many = (voices.data ?? []).length > 0;
   const when = [whenWords(take.sungAt), warmedWords(take.warmedUp)].filter((fact) => fact !== null).join(", ");
@@ -99,7 +112,7 @@ function Result({ take, onAgain, onFelt, onKept }: ResultProps) {
       wide
       footer={
         choosing !== null ? null : (
-          <View style={{ flexDirection: "row", gap: 10 }}>
+          <View style={{ flexDirection: "row", flexWrap: "wrap", gap: 10 }}>
             <Button kind="secondary" icon="again" label="Sing again" onPress={onAgain} testID="sing-again" />
             <Button
               label="Keep this voice"

@@ -24,7 +24,12 @@ export function TakeList({ takes, erasing, onErase }: TakeListProps) {
       <Heading level={2}>Takes</Heading>
       <View role="list">
         {takes.map((take) => (
-          <View key={take.id} role="listitem" testID="take-row" style={{ borderTopWidth: 1, borderColor: colors.line, paddingVertical: 8 }}>
+          <View
+            key={take.id}
+            role="listitem"
+            testID="take-row"
+            style={{ borderTopWidth: 1, borderColor: colors.line, paddingVertical: 8 }}
+          >
             <View style={{ flexDirection: "row", alignItems: "center", gap: 12 }}>
               <View style={{ flexGrow: 1, flexShrink: 1 }}>
                 <Text variant="strong">{bandWords(inTune(take.range, take.tuningCents))}</Text>
@@ -32,16 +37,27 @@ export function TakeList({ takes, erasing, onErase }: TakeListProps) {
                   {factsOf(take)}
                 </Text>
               </View>
-              {asked !== take.id && (
-                <IconButton icon="trash" label={`Erase the take of ${whenWords(take.sungAt)}`} onPress={() => setAsked(take.id)} testID="take-erase" />
-              )}
+              <IconButton
+                icon="trash"
+                label={`Erase the take of ${whenWords(take.sungAt)}`}
+                onPress={() => setAsked(asked === take.id ? null : take.id)}
+                testID="take-erase"
+              />
             </View>
             {asked === take.id && (
               <View role="group" aria-label="Erase this take?" style={{ gap: 8, paddingVertical: 8 }}>
-                <Text variant="small">Erase this take? Your notes are then worked out again without it. This cannot be undone.</Text>
+                <Text variant="small">
+                  Erase this take? Your notes are then worked out again without it. This cannot be undone.
+                </Text>
                 <View style={{ flexDirection: "row", gap: 10 }}>
                   <Button small kind="secondary" label="Keep it" onPress={() => setAsked(null)} />
-                  <Button small label="Erase" busy={erasing} onPress={() => onErase(take.id)} testID="take-erase-confirm" />
+                  <Button
+                    small
+                    label="Erase"
+                    busy={erasing}
+                    onPress={() => onErase(take.id)}
+                    testID="take-erase-confirm"
+                  />
                 </View>
               </View>
             )}

@@ -31,7 +31,10 @@ export function TakeResult({ take, onAgain, onSongs, onFelt }: TakeResultProps) 
   const wide = useLayout() === "wide";
   const { report } = take;
   if (!report.range || !report.comfort) return null;
-  const voice = { range: inTune(report.range, report.tuningCents), comfort: inTune(report.comfort, report.tuningCents) };
+  const voice = {
+    range: inTune(report.range, report.tuningCents),
+    comfort: inTune(report.comfort, report.tuningCents),
+  };
   const heading = <BandHeading label="Your comfortable notes" band={voice.comfort} />;
   const ladder = <VoiceLadder voice={voice} times={timeOnNotes(report.notes, report.tuningCents)} ends="held" />;
   const words = <ResultWords take={take} onAgain={onAgain} onSongs={onSongs} onFelt={onFelt} />;
@@ -57,7 +60,9 @@ export function TakeResult({ take, onAgain, onSongs, onFelt }: TakeResultProps) 
 
 function ResultWords({ take, onAgain, onSongs, onFelt }: TakeResultProps) {
   const { report, stoppedBy, processed } = take;
-  const judged = report.notes.filter(({ sustained, clear, start, end }) => sustained || clear || end - start >= 0.15).length;
+  const judged = report.notes.filter(
+    ({ sustained, clear, start, end }) => sustained || clear || end - start >= 0.15,
+  ).length;
   const clear = report.notes.filter((note) => note.clear).length;
   const [first = "", ...others] = report.reasons;
   return (

@@ -48,7 +48,12 @@ function whole({ lowMidi, highMidi }: PitchBand): PitchBand {
 
 function labelsOf(range: PitchBand, comfort: PitchBand, ends: VoiceLadderProps["ends"]): LadderLabel[] {
   const [highest, lowest] = ends === "held" ? ["highest held", "lowest held"] : ["highest", "lowest"];
-  const label = (midi: number, text: string, tone: LadderLabel["tone"]): LadderLabel => ({ midi, name: noteWord(midi), text, tone });
+  const label = (midi: number, text: string, tone: LadderLabel["tone"]): LadderLabel => ({
+    midi,
+    name: noteWord(midi),
+    text,
+    tone,
+  });
   const labels = [label(comfort.highMidi, "comfort top", "comfort"), label(comfort.lowMidi, "comfort low", "comfort")];
   if (range.highMidi > comfort.highMidi) labels.push(label(range.highMidi, highest, "reach"));
   if (range.lowMidi < comfort.lowMidi) labels.push(label(range.lowMidi, lowest, "reach"));

@@ -25,6 +25,7 @@ type Doing = "renaming" | "adding" | "deleting" | null;
 export function VoiceNames({ voices, chosen, takeCount, busy, onChoose, onSave, onRemove }: VoiceNamesProps) {
   const [doing, setDoing] = useState<Doing>(null);
   const end = () => setDoing(null);
+  const toggle = (next: Doing) => () => setDoing(doing === next ? null : next);
   return (
     <View role="region" aria-label="Your voices" style={{ gap: 10 }}>
       <Heading level={2}>Your voices</Heading>
@@ -33,17 +34,42 @@ export function VoiceNames({ voices, chosen, takeCount, busy, onChoose, onSave, 
           label="The voice that keys are found for"
           value={chosen.id}
           onChange={onChoose}
-          options={voices.map((voice) => ({ value: voice.id, label: voice.name, hint: hintOf(voice, takeCount(voice)) }))}
+          options={voices.map((voice) => ({
+            value: voice.id,
+            label: voice.name,
+            hint: hintOf(voice, takeCount(voice)),
+          }))}
           testID="voice-choice"
         />
       )}
-      {doing === null && (
-        <View style={{ flexDirection: "row", flexWrap: "wrap", columnGap: 12 }}>
-          <Button kind="text" icon="plus" label="New voice" onPress={() => setDoing("adding")} testID="voice-new" />
-          <Button kind="text" icon="edit" label="Rename" accessibleName={`Rename ${chosen.name}`} onPress={() => setDoing("renaming")} testID="voice-rename" />
-          <Button kind="text" icon="trash" label="Delete" accessibleName={`Delete ${chosen.name}`} onPress={() => setDoing("deleting")} testID="voice-delete" />
-        </View>
-      )}
+      <View style={{ flexDirection: "row", flexWrap: "wrap", columnGap: 12, marginLeft: -8 }}>
+        <Button
+          kind="text"
+          icon="plus"
+          label="New voice"
+          expanded={doing === "adding"}
+          onPress={toggle("adding")}
+          testID="voice-new"
+        />
+        <Button
+          kind="text"
+          icon="edit"
+          label="Rename"
+          accessibleName={`Rename ${chosen.name}`}
+          expanded={doing === "renaming"}
+          onPress={toggle("renaming")}
+          testID="voice-rename"
+        />
+        <Button
+          kind="text"
+          icon="trash"
+          label="Delete"
+          accessibleName={`Delete ${chosen.name}`}
+          expanded={doing === "deleting"}
+          onPress={toggle("deleting")}
+          testID="voice-delete"
+        />
+      </View>
       {(doing === "renaming" || doing === "adding") && (
         <VoiceName
           key={doing}

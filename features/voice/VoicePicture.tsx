@@ -75,5 +75,7 @@ function timesOf(takes: readonly Take[]) {
 
 /** An estimate that names the same notes says nothing new. */
 export function reachesFarther(estimate: PitchBand, range: PitchBand): boolean {
-  return noteWord(estimate.lowMidi) !== noteWord(range.lowMidi) || noteWord(estimate.highMidi) !== noteWord(range.highMidi);
+  return (
+    noteWord(estimate.lowMidi) !== noteWord(range.lowMidi) || noteWord(estimate.highMidi) !== noteWord(range.highMidi)
+  );
 }

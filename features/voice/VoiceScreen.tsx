@@ -35,13 +35,22 @@ export function VoiceScreen() {
       footer={
         voice && (
           <View style={{ flexDirection: "row", gap: 10 }}>
-            <LinkButton kind="secondary" label="Set by hand" href={`/voice/by-hand?voice=${voice.id}`} testID="voice-by-hand" />
+            <LinkButton
+              kind="secondary"
+              label="Set by hand"
+              href={`/voice/by-hand?voice=${voice.id}`}
+              testID="voice-by-hand"
+            />
             <LinkButton icon="mic" label="Sing again" href="/voice/sing" style={{ flexGrow: 1 }} testID="voice-sing" />
           </View>
         )
       }
     >
-      <QueryState query={both} title="Your voices could not be opened" skeleton={<Skeleton words="Opening your voices" bars={[{ height: 52, width: 230 }, { height: 380 }]} />}>
+      <QueryState
+        query={both}
+        title="Your voices could not be opened"
+        skeleton={<Skeleton words="Opening your voices" bars={[{ height: 52, width: 230 }, { height: 380 }]} />}
+      >
         {(data) => (voice ? <ChosenVoice voice={voice} {...data} /> : <NoVoiceYet />)}
       </QueryState>
     </Screen>
@@ -74,7 +83,14 @@ function ChosenVoice({ voice, voices, takes }: { voice: Voice; voices: Voice[]; 
   const own = takes.filter(({ voiceId }) => voiceId === voice.id);
   const refusal = [save, remove, erase].find(({ isError }) => isError)?.error;
   return (
-    <View style={{ flexDirection: wide ? "row" : "column", gap: 32, alignItems: wide ? "flex-start" : "stretch", paddingTop: 4 }}>
+    <View
+      style={{
+        flexDirection: wide ? "row" : "column",
+        gap: 32,
+        alignItems: wide ? "flex-start" : "stretch",
+        paddingTop: 4,
+      }}
+    >
       <View style={wide ? { flexBasis: 0, flexGrow: 1 } : null}>
         <VoicePicture voice={voice} takes={own} onUseTakes={() => save.mutate({ ...voice, byHand: null })} />
       </View>

@@ -1,6 +1,11 @@
 import { readByHand, usualComfort } from "./byHand";
 
-const fields = (lowest: string, highest: string, comfortLow = "", comfortTop = "") => ({ lowest, highest, comfortLow, comfortTop });
+const fields = (lowest: string, highest: string, comfortLow = "", comfortTop = "") => ({
+  lowest,
+  highest,
+  comfortLow,
+  comfortTop,
+});
 
 it("reads notes as people write them and assumes a comfort band inside", () => {
   expect(readByHand(fields(" f3 ", "B♭4"))).toEqual({
@@ -10,7 +15,9 @@ it("reads notes as people write them and assumes a comfort band inside", () => {
 });
 
 it("keeps a comfort band that was given", () => {
-  expect(readByHand(fields("F3", "C5", "G3", "A4"))).toMatchObject({ voice: { comfort: { lowMidi: 55, highMidi: 69 } } });
+  expect(readByHand(fields("F3", "C5", "G3", "A4"))).toMatchObject({
+    voice: { comfort: { lowMidi: 55, highMidi: 69 } },
+  });
 });
 
 it("leaves a narrow range without reserves", () => {
@@ -18,8 +25,14 @@ it("leaves a narrow range without reserves", () => {
 });
 
 it("holds to the one end that was given, however far it lies", () => {
-  expect(readByHand(fields("C3", "C5", "B4"))).toMatchObject({ ok: true, voice: { comfort: { lowMidi: 71, highMidi: 72 } } });
-  expect(readByHand(fields("C3", "C5", "", "C#3"))).toMatchObject({ ok: true, voice: { comfort: { lowMidi: 48, highMidi: 49 } } });
+  expect(readByHand(fields("C3", "C5", "B4"))).toMatchObject({
+    ok: true,
+    voice: { comfort: { lowMidi: 71, highMidi: 72 } },
+  });
+  expect(readByHand(fields("C3", "C5", "", "C#3"))).toMatchObject({
+    ok: true,
+    voice: { comfort: { lowMidi: 48, highMidi: 49 } },
+  });
 });
 
 it.each([

@@ -75,8 +75,18 @@ export function failureWords({ kind, report, seconds, stoppedBy }: Failure): Fai
   if (kind in withoutSound) return { title, ...withoutSound[kind as keyof typeof withoutSound], safe: nothingRecorded };
   if (kind === "interrupted" && isInterruption(stoppedBy)) {
     const short = seconds > 0 ? " What you sang until then was not enough to read your notes from." : "";
-    return { title, happened: `${causeWords(stoppedBy, seconds)}${short}`, safe: nothingKept, next: "Sing again when it is free." };
+    return {
+      title,
+      happened: `${causeWords(stoppedBy, seconds)}${short}`,
+      safe: nothingKept,
+      next: "Sing again when it is free.",
+    };
   }
   if (report) return { title, happened: report.sentence, safe: nothingKept, next: report.nextStep };
-  return { title, happened: "Something went wrong in Larkspan while it listened.", safe: nothingKept, next: "Try again, or set your notes by hand." };
+  return {
+    title,
+    happened: "Something went wrong in Larkspan while it listened.",
+    safe: nothingKept,
+    next: "Try again, or set your notes by hand.",
+  };
 }

@@ -6,7 +6,12 @@ const frames = (midis: (number | null)[]) =>
 const held = (midi: number, count: number) => Array.from({ length: count }, () => midi);
 
 it("names the note that sounds and how long it has been held", () => {
-  expect(noteNow(frames([...held(62, 40), ...held(64.05, 130)]))).toEqual({ midi: 64, cents: 5, heldS: 1.3, words: "On the line" });
+  expect(noteNow(frames([...held(62, 40), ...held(64.05, 130)]))).toEqual({
+    midi: 64,
+    cents: 5,
+    heldS: 1.3,
+    words: "On the line",
+  });
 });
 
 it.each([

@@ -28,7 +28,10 @@ it("knows nothing of a voice without takes", () => {
 
 it("says what the takes of this voice say, and only of this one", () => {
   const other = take("t2", { voiceId: "another", range: { lowMidi: 40, highMidi: 80 } });
-  expect(singingVoiceOf(voice, [take("t1"), other])).toEqual({ range: { lowMidi: 53, highMidi: 72 }, comfort: { lowMidi: 55, highMidi: 69 } });
+  expect(singingVoiceOf(voice, [take("t1"), other])).toEqual({
+    range: { lowMidi: 53, highMidi: 72 },
+    comfort: { lowMidi: 55, highMidi: 69 },
+  });
 });
 
 it("is again what it was when a take is erased", () => {
@@ -39,7 +42,11 @@ it("is again what it was when a take is erased", () => {
 });
 
 it("takes the singer's own tuning off, so that notes keep the names they had on the result", () => {
-  const flat = take("t1", { tuningCents: -40, range: { lowMidi: 52.6, highMidi: 71.6 }, comfort: { lowMidi: 54.6, highMidi: 68.6 } });
+  const flat = take("t1", {
+    tuningCents: -40,
+    range: { lowMidi: 52.6, highMidi: 71.6 },
+    comfort: { lowMidi: 54.6, highMidi: 68.6 },
+  });
   const singing = singingVoiceOf(voice, [flat]);
   expect(singing?.range.lowMidi).toBeCloseTo(53, 10);
   expect(singing?.comfort.highMidi).toBeCloseTo(69, 10);
@@ -47,7 +54,10 @@ it("takes the singer's own tuning off, so that notes keep the names they had on 
 
 it("prefers notes set by hand, with comfort inside the range", () => {
   const byHand = { range: { lowMidi: 50, highMidi: 70 }, comfort: { lowMidi: 48, highMidi: 66 } };
-  expect(singingVoiceOf({ ...voice, byHand }, [take("t1")])).toEqual({ range: byHand.range, comfort: { lowMidi: 50, highMidi: 66 } });
+  expect(singingVoiceOf({ ...voice, byHand }, [take("t1")])).toEqual({
+    range: byHand.range,
+    comfort: { lowMidi: 50, highMidi: 66 },
+  });
 });
 
 it("picks the voice asked for, else the chosen one, else the first", () => {

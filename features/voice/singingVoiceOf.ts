@@ -22,7 +22,15 @@ export function singingVoiceOf(voice: Voice, takes: readonly Take[]): SingingVoi
 function profileTake(take: Take): ProfileTake {
   const { id, sungAt, certainty, effort, tuningCents } = take;
   const band = (sung: PitchBand) => inTune(sung, tuningCents);
-  return { id, sungAt, certainty, effort, range: band(take.range), comfort: band(take.comfort), estimate: band(take.estimate) };
+  return {
+    id,
+    sungAt,
+    certainty,
+    effort,
+    range: band(take.range),
+    comfort: band(take.comfort),
+    estimate: band(take.estimate),
+  };
 }
 
 function within(band: PitchBand, outer: PitchBand): PitchBand {

@@ -10,7 +10,16 @@ const report: TakeReport = {
   durationS: 9.4,
   f0: [null, 220],
   notes: [
-    { start: 0.5, end: 1.5, midi: 59.8, steadinessCents: 12, vibrato: { rateHz: 5.5, extentCents: 40 }, levelDb: -20, sustained: true, clear: true },
+    {
+      start: 0.5,
+      end: 1.5,
+      midi: 59.8,
+      steadinessCents: 12,
+      vibrato: { rateHz: 5.5, extentCents: 40 },
+      levelDb: -20,
+      sustained: true,
+      clear: true,
+    },
   ],
   range: { lowMidi: 52.8, highMidi: 71.8 },
   comfort: { lowMidi: 54.3, highMidi: 69.3 },
@@ -36,7 +45,14 @@ const voiceId = "5c8d1c1e-8f55-4b7e-8d0a-6a6f4b1f2d22";
 it("keeps the numbers of a take as the contract wants them, and nothing of its sound", () => {
   const kept = takeOfHeard(heard, voiceId);
   expect(takeSchema.parse(kept)).toEqual(kept);
-  expect(kept).toMatchObject({ id: heard.id, voiceId, effort: 2, warmedUp: false, range: report.range, durationS: 9.4 });
+  expect(kept).toMatchObject({
+    id: heard.id,
+    voiceId,
+    effort: 2,
+    warmedUp: false,
+    range: report.range,
+    durationS: 9.4,
+  });
   expect(Object.keys(kept)).not.toContain("pcm");
   expect(kept.reasons).toHaveLength(20);
 });

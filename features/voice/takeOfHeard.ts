@@ -32,6 +32,13 @@ export function takeOfHeard(heard: HeardTake, voiceId: string): Take {
     reasons: report.reasons.slice(0, 20).map((reason) => reason.slice(0, 300)),
     notes: report.notes
       .slice(0, 2000)
-      .map(({ start, end, midi, steadinessCents, sustained, clear }) => ({ start, end, midi, steadinessCents, sustained, clear })),
+      .map(({ start, end, midi, steadinessCents, sustained, clear }) => ({
+        start,
+        end,
+        midi,
+        steadinessCents,
+        sustained,
+        clear,
+      })),
   };
 }

@@ -22,7 +22,10 @@ export function timeOnNotes(notes: readonly HeldNote[], tuningCents: number): No
 
 /** The note sung longest, or null where none was held. */
 export function longestNote(times: readonly NoteTime[]): NoteTime | null {
-  return times.reduce<NoteTime | null>((longest, time) => (longest && longest.seconds >= time.seconds ? longest : time), null);
+  return times.reduce<NoteTime | null>(
+    (longest, time) => (longest && longest.seconds >= time.seconds ? longest : time),
+    null,
+  );
 }
 
 /** The times as marks of a ladder, in ink: what was sung is neither reach nor beyond. Their shares add up to 1. */

@@ -11,8 +11,10 @@ const oldestFirst = (a: Voice, b: Voice) => a.createdAt.localeCompare(b.createdA
 const newestFirst = (a: Take, b: Take) => b.sungAt.localeCompare(a.sungAt);
 
 export const voiceQueries = {
-  list: () => queryOptions({ queryKey: ["voices"], queryFn: async () => (await shelf.list("voices")).sort(oldestFirst) }),
-  takes: () => queryOptions({ queryKey: ["takes"], queryFn: async () => (await shelf.list("takes")).sort(newestFirst) }),
+  list: () =>
+    queryOptions({ queryKey: ["voices"], queryFn: async () => (await shelf.list("voices")).sort(oldestFirst) }),
+  takes: () =>
+    queryOptions({ queryKey: ["takes"], queryFn: async () => (await shelf.list("takes")).sort(newestFirst) }),
 };
 
 /** A new voice without any notes yet. */

@@ -32,7 +32,7 @@ export function hear(
 ): void {
   const passed = Math.max(0, heard.seconds - live.seconds);
   live.levelDb = Math.max(heard.levelDb, live.levelDb - 20 * passed);
-  live.peak = Math.max(heard.peak, live.peak * 10 ** (-passed));
+  live.peak = Math.max(heard.peak, live.peak * 10 ** -passed);
   live.seconds = heard.seconds;
   live.atMs = atMs;
   const from = heard.seconds - keptS;

@@ -30,7 +30,10 @@ const flushMs = 500;
  *
  * @throws MicrophoneUnavailable with the reason
  */
-export async function openMicrophone(sound: MessagePort, onInterrupted: (cause: Interruption) => void): Promise<Microphone> {
+export async function openMicrophone(
+  sound: MessagePort,
+  onInterrupted: (cause: Interruption) => void,
+): Promise<Microphone> {
   if (!window.isSecureContext) throw new MicrophoneUnavailable("insecure");
   if (!navigator.mediaDevices?.getUserMedia || typeof AudioWorkletNode === "undefined") {
     throw new MicrophoneUnavailable("unsupported");

@@ -11,7 +11,13 @@ const heard = {
   comfort: { lowMidi: 55, highMidi: 69 },
   estimate: { lowMidi: 51, highMidi: 74 },
 } as TakeReport;
-const silent = { ...heard, verdict: "too-quiet", sentence: "Hardly any sound.", nextStep: "Move closer.", range: null } as TakeReport;
+const silent = {
+  ...heard,
+  verdict: "too-quiet",
+  sentence: "Hardly any sound.",
+  nextStep: "Move closer.",
+  range: null,
+} as TakeReport;
 
 const after = (events: RecorderEvent[], from: RecorderState = idle) => events.reduce(recorder, from);
 const listening: RecorderEvent[] = [{ kind: "ask" }, { kind: "opened", ...sung }, { kind: "heard", seconds: 4.2 }];
@@ -22,20 +28,30 @@ it("goes from the press to the result", () => {
   expect(after(listening)).toMatchObject({ step: "listening", seconds: 4.2, id: "take-1" });
   expect(after([...listening, { kind: "stop" }])).toMatchObject({ step: "stopping", stoppedBy: "singer" });
   const result = after([...listening, { kind: "stop" }, { kind: "flushed" }, judged(heard)]);
-  expect(result).toMatchObject({ step: "result", take: { id: "take-1", stoppedBy: "singer", warmedUp: null, effort: null } });
+  expect(result).toMatchObject({
+    step: "result",
+    take: { id: "take-1", stoppedBy: "singer", warmedUp: null, effort: null },
+  });
 });
 
 it("stops by itself at 20 s", () => {
   expect(after([...listening, { kind: "heard", seconds: 19.98 }]).step).toBe("listening");
-  expect(after([...listening, { kind: "heard", seconds: 20.01 }])).toMatchObject({ step: "stopping", stoppedBy: "full", seconds: 20 });
-});
-
-it.each(["refused", "no-microphone", "insecure", "busy", "unsupported"] as const)("says that there is no microphone: %s", (why) => {
-  expect(after([{ kind: "ask" }, { kind: "unavailable", why }])).toEqual({
-    step: "failure",
-    failure: { kind: why, report: null, seconds: 0, stoppedBy: null },
+  expect(after([...listening, { kind: "heard", seconds: 20.01 }])).toMatchObject({
+    step: "stopping",
+    stoppedBy: "full",
+    seconds: 20,
   });
 });
+
+it.each(["refused", "no-microphone", "insecure", "busy", "unsupported"] as const)(
+  "says that there is no microphone: %s",
+  (why) => {
+    expect(after([{ kind: "ask" }, { kind: "unavailable", why }])).toEqual({
+      step: "failure",
+      failure: { kind: why, report: null, seconds: 0, stoppedBy: null },
+    });
+  },
+);
 
 it("keeps what was sung before an interruption", () => {
   const events: RecorderEvent[] = [...listening, { kind: "interrupted", cause: "taken" }, { kind: "flushed" }];
@@ -44,7 +60,10 @@ it("keeps what was sung before an interruption", () => {
 
 it("calls a take interrupted, not too quiet, where the interruption left too little of it", () => {
   const events: RecorderEvent[] = [...listening, { kind: "interrupted", cause: "unplugged" }, { kind: "flushed" }];
-  expect(after([...events, judged(silent)])).toMatchObject({ step: "failure", failure: { kind: "interrupted", stoppedBy: "unplugged", seconds: 4.2 } });
+  expect(after([...events, judged(silent)])).toMatchObject({
+    step: "failure",
+    failure: { kind: "interrupted", stoppedBy: "unplugged", seconds: 4.2 },
+  });
 });
 
 it("passes on the engine's verdict and words where nothing was heard", () => {
@@ -62,7 +81,13 @@ it("judges what a reload cut off, or shows what was already judged", () => {
 });
 
 it("remembers how it felt", () => {
-  const result = after([...listening, { kind: "stop" }, { kind: "flushed" }, judged(heard), { kind: "felt", warmedUp: true, effort: 2 }]);
+  const result = after([
+    ...listening,
+    { kind: "stop" },
+    { kind: "flushed" },
+    judged(heard),
+    { kind: "felt", warmedUp: true, effort: 2 },
+  ]);
   expect(result).toMatchObject({ take: { warmedUp: true, effort: 2 } });
 });
 

@@ -26,13 +26,21 @@ function setUp(faults: { push?: boolean; judge?: boolean } = {}) {
   });
   const begin = (): ((sound: TakeSound) => void) => {
     const port = { close: jest.fn(), onmessage: null as ((event: { data: TakeSound }) => void) | null };
-    tell({ kind: "begin", sampleRate: rate, sound: port as unknown as MessagePort, keepAs: "take-1" } satisfies ToTakeWorker);
+    tell({
+      kind: "begin",
+      sampleRate: rate,
+      sound: port as unknown as MessagePort,
+      keepAs: "take-1",
+    } satisfies ToTakeWorker);
     return (data) => port.onmessage?.({ data });
   };
   return { tell, begin, posted, parts, judgedLengths };
 }
 
-const block = (length: number, value = 0.5): TakeSound => ({ kind: "block", pcm: new Float32Array(length).fill(value) });
+const block = (length: number, value = 0.5): TakeSound => ({
+  kind: "block",
+  pcm: new Float32Array(length).fill(value),
+});
 
 it("answers every block with its frames, the time so far and the loudness", () => {
   const { begin, posted } = setUp();

@@ -1,7 +1,8 @@
 /** The sound of a take as a WAV file (16-bit mono PCM), for playing back on this device. */
 export function takeSound(pcm: Float32Array, sampleRate: number): Blob {
   const bytes = new DataView(new ArrayBuffer(44 + 2 * pcm.length));
-  const text = (at: number, word: string) => [...word].forEach((letter, k) => bytes.setUint8(at + k, letter.charCodeAt(0)));
+  const text = (at: number, word: string) =>
+    [...word].forEach((letter, k) => bytes.setUint8(at + k, letter.charCodeAt(0)));
   text(0, "RIFF");
   bytes.setUint32(4, 36 + 2 * pcm.length, true);
   text(8, "WAVEfmt ");

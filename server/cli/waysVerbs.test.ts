@@ -1,0 +1,96 @@
+import { mkdtemp, writeFile } from "node:fs/promises";
+import { tmpdir } from "node:os";
+import { join } from "node:path";
+import { keysVerb } from "./keysVerb";
+import { BadInput, type Verb } from "./verb";
+import { instrumentsVerb, shapesVerb, tensionVerb, waysVerb } from "./waysVerbs";
+
+const words = (line: string) => line.split(" ").filter(Boolean);
+let folder: string;
+
+beforeAll(async () => {
+  folder = await mkdtemp(join(tmpdir(), "larkspan-"));
+  await writeFile(join(folder, "slip.txt"), "D          G\nLamps on the harbour\nA     D\nburning\n");
+  await writeFile(join(folder, "slip.abc"), "X:1\nT:Slip\nM:3/4\nL:1/4\nK:G\nD G2|A B2|d c A|G3|\n");
+  await writeFile(join(folder, "prose.txt"), "No chords in here at all.\n");
+});
+
+test("keys prints a line a key with the agreed fields, best first", async () => {
+  const fields = ["tonic", "octave", "lowMidi", "highMidi", "score", "parts", "beyond", "reason"];
+  for (const input of [`--melody ${join(folder, "slip.abc")}`, "--span D4-D5 --home G"]) {
+    const lines = await keysVerb.run(words(`${input} --voice A2-E4 --comfort C3-C4`));
+    expect(lines).toHaveLength(12);
+    for (const line of lines) expect(Object.keys(line)).toEqual(fields);
+    expect(lines[0]).toMatchObject({ beyond: false, parts: { comfort: 50 } });
+  }
+});
+
+test("without a comfort band two semitones above and one below are kept", async () => {
+  const given = await keysVerb.run(words("--span C4-C5 --home C --voice E2-E4 --comfort F2-D4"));
+  expect(await keysVerb.run(words("--span C4-C5 --home C --voice E2-E4"))).toEqual(given);
+});
+
+test("shapes prints a line a shape, easiest first", async () => {
+  const lines = await shapesVerb.run(words("C --tuning A3,D4,F#4"));
+  expect(lines[0]).toMatchObject({ frets: [3, 2, 1], fingers: [3, 2, 1], barre: null });
+  expect(Object.keys(lines[0]!)).toEqual(["frets", "fingers", "barre", "reachMm", "ease"]);
+  expect((await shapesVerb.run(words("C --tuning A3,D4,F♯4 --frets 9"))).length).toBeLessThan(lines.length);
+  const all = await shapesVerb.run(words("C --tuning G4,C4,E4,A4 --scale 432 --all"));
+  expect(all.length).toBeGreaterThan((await shapesVerb.run(words("C --tuning G4,C4,E4,A4 --scale 432"))).length);
+});
+
+test("ways finds the key of the chart, and takes another when told", async () => {
+  const lines = await waysVerb.run(words(`${join(folder, "slip.txt")} --to C --instrument box-adf`));
+  const fields = ["retune", "capo", "shapeKey", "soundingKey", "chords", "difficulty", "cautions", "why"];
+  for (const line of lines) expect(Object.keys(line)).toEqual(fields);
+  expect(lines).toContainEqual(expect.objectContaining({ retune: -2, capo: 0, shapeKey: "D", soundingKey: "C" }));
+  const told = await waysVerb.run(words(`${join(folder, "slip.txt")} --to C --instrument box-adf --from G`));
+  const asIs = told.find((line) => "retune" in line && line.retune === 0 && "capo" in line && line.capo === 0);
+  expect(asIs).toMatchObject({
+    chords: expect.arrayContaining([expect.objectContaining({ written: "D", played: "G" })]),
+  });
+});
+
+test("instruments and tension print a line each, strings low to high", async () => {
+  expect(await instrumentsVerb.run([])).toContainEqual({
+    id: "box-adf",
+    name: "Box guitar, A-D-F♯",
+    strings: ["A3", "D4", "F#4"],
+    scaleMm: 635,
+    frets: 20,
+  });
+  // D'Addario's chart 13934: a 10-46 set, nickel-plated there, so the plain strings are compared.
+  const lines = await tensionVerb.run(words("--instrument guitar --shift -2 --gauges .046,.036,.026,.017,.013,.010"));
+  expect(lines).toHaveLength(6);
+  expect(lines[5]).toEqual({ string: "E4", gauge: 0.01, beforeLb: 16.2, afterLb: 12.86, verdict: "fine" });
+});
+
+const cases: [string, Verb, string][] = [
+  ["a band upside down", keysVerb, "--span C4-C5 --home C --voice E4-E2"],
+  ["a band that is none", keysVerb, "--span C4 --home C --voice E2-E4"],
+  ["comfort outside the voice", keysVerb, "--span C4-C5 --home C --voice E2-E4 --comfort C2-C4"],
+  ["no voice", keysVerb, "--span C4-C5 --home C"],
+  ["no home for a span", keysVerb, "--span C4-C5 --voice E2-E4"],
+  ["a file that is not there", keysVerb, "--melody nowhere.mid --voice E2-E4"],
+  ["an unknown option", keysVerb, "--loud"],
+  ["no chord", shapesVerb, "--tuning A3,D4"],
+  ["what is no chord", shapesVerb, "Amen --tuning A3,D4,F#4"],
+  ["what is no note", shapesVerb, "C --tuning A3,loud"],
+  ["frets below zero", shapesVerb, "C --tuning A3,D4,F#4 --frets -1"],
+  ["a scale of words", shapesVerb, "C --tuning A3,D4,F#4 --scale long"],
+  ["an unknown instrument", tensionVerb, "--instrument lute --shift 1"],
+  ["half a semitone", tensionVerb, "--instrument guitar --shift 0.5"],
+  ["too few gauges", tensionVerb, "--instrument guitar --shift 1 --gauges .012,.016"],
+  ["no file", waysVerb, "--to C --instrument guitar"],
+];
+test.each(cases)("%s is bad input, said in one line", async (_, verb, line) => {
+  const refused = verb.run(words(line));
+  await expect(refused).rejects.toBeInstanceOf(BadInput);
+  await expect(refused).rejects.toThrow(/^[^\n]{10,}\.$/);
+});
+
+test("a chart without chords and a key that is none are bad input", async () => {
+  const run = (file: string, rest: string) => waysVerb.run(words(`${join(folder, file)} ${rest}`));
+  await expect(run("prose.txt", "--to C --instrument guitar")).rejects.toThrow("prose.txt holds no chords.");
+  await expect(run("slip.txt", "--to Q --instrument guitar")).rejects.toThrow('not "Q".');
+});

@@ -7,6 +7,7 @@ import { Form } from "@/features/ui/Form";
 import { IconButton } from "@/features/ui/IconButton";
 import { Notice } from "@/features/ui/Notice";
 import { Text } from "@/features/ui/Text";
+import { useLayout } from "@/features/ui/useLayout";
 import { noteName, parseNoteName } from "@/shared/music/pitch";
 import type { SingingVoice } from "@/shared/keys/keyScore";
 import { readByHand, usualComfort, type ByHandFields } from "./byHand";
@@ -47,6 +48,7 @@ export function ByHandForm({ voice, busy, refusal, onKeep }: ByHandFormProps) {
     resolver,
     mode: "onTouched",
   });
+  const wide = useLayout() === "wide";
   const [active, setActive] = useState<keyof ByHandFields>("lowest");
   const values = watch();
   const set = (name: keyof ByHandFields, midi: number) => {
@@ -59,35 +61,8 @@ export function ByHandForm({ voice, busy, refusal, onKeep }: ByHandFormProps) {
     const reading = readByHand(typed);
     if (reading.ok) onKeep(reading.voice);
   });
-  return (
-    <Form label="Notes of your voice" onSubmit={() => void keep()} gap={20}>
-      {rows.map(({ name, label, hint }) => (
-        <Controller
-          key={name}
-          control={control}
-          name={name}
-          render={({ field, fieldState }) => (
-            <View style={{ flexDirection: "row", alignItems: "flex-start", gap: 4 }}>
-              <View style={{ flexGrow: 1, flexShrink: 1 }}>
-                <Field
-                  label={label}
-                  hint={hintFor(name, hint, values)}
-                  value={field.value}
-                  onChangeText={field.onChange}
-                  onBlur={field.onBlur}
-                  error={fieldState.error?.message}
-                  testID={`by-hand-${name}`}
-                />
-              </View>
-              <View style={{ flexDirection: "row", marginTop: 26 }}>
-                <IconButton icon="minus" label={`${label}: a semitone lower`} onPress={() => step(name, -1)} />
-                <IconButton icon="plus" label={`${label}: a semitone higher`} onPress={() => step(name, 1)} />
-              </View>
-            </View>
-          )}
-        />
-      ))}
-      <NoteLadder values={values} active={active} onActive={setActive} onNote={(midi) => set(active, midi)} />
+  const foot = (
+    <>
       {refusal !== null && (
         <Notice kind="error" title="Not kept">
           {refusal}
@@ -98,6 +73,45 @@ export function ByHandForm({ voice, busy, refusal, onKeep }: ByHandFormProps) {
         Type a letter and an octave: C4 is the C in the middle of a piano. Singing a few seconds finds the same notes
         for you.
       </Text>
+    </>
+  );
+  return (
+    <Form label="Notes of your voice" onSubmit={() => void keep()} gap={20}>
+      <View style={wide ? { flexDirection: "row", gap: 64, alignItems: "flex-start" } : { gap: 20 }}>
+        <View style={[{ gap: 20 }, wide ? { flexGrow: 1, flexBasis: 0 } : null]}>
+          {rows.map(({ name, label, hint }) => (
+            <Controller
+              key={name}
+              control={control}
+              name={name}
+              render={({ field, fieldState }) => (
+                <View style={{ flexDirection: "row", alignItems: "flex-start", gap: 4 }}>
+                  <View style={{ flexGrow: 1, flexShrink: 1 }}>
+                    <Field
+                      label={label}
+                      hint={hintFor(name, hint, values)}
+                      value={field.value}
+                      onChangeText={field.onChange}
+                      onBlur={field.onBlur}
+                      error={fieldState.error?.message}
+                      testID={`by-hand-${name}`}
+                    />
+                  </View>
+                  <View style={{ flexDirection: "row", marginTop: 26 }}>
+                    <IconButton icon="minus" label={`${label}: a semitone lower`} onPress={() => step(name, -1)} />
+                    <IconButton icon="plus" label={`${label}: a semitone higher`} onPress={() => step(name, 1)} />
+                  </View>
+                </View>
+              )}
+            />
+          ))}
+          {wide && foot}
+        </View>
+        <View style={wide ? { flexGrow: 1, flexBasis: 0 } : null}>
+          <NoteLadder values={values} active={active} onActive={setActive} onNote={(midi) => set(active, midi)} />
+        </View>
+      </View>
+      {!wide && foot}
     </Form>
   );
 }

@@ -30,12 +30,12 @@ export function ByHandScreen({ voiceId, onKept }: ByHandScreenProps) {
     refetch: () => Promise.all([voices.refetch(), takes.refetch()]),
   };
   return (
-    <Screen title="Notes by hand" crumb={{ label: "Voice", href: "/voice" }}>
+    <Screen title="Notes by hand" crumb={{ label: "Voice", href: "/voice" }} wide>
       <QueryState query={both} title="Your voices could not be opened">
         {(data) => {
           const voice = pickVoice(data.voices, voiceId, chosenId) ?? fresh;
           return (
-            <View style={{ gap: 16, paddingTop: 8, maxWidth: 560 }}>
+            <View style={{ gap: 16, paddingTop: 8, maxWidth: 1040 }}>
               <Text tone="soft">
                 {voice === fresh
                   ? "Give the lowest and the highest note that you can hold without pressing."

@@ -23,6 +23,9 @@ export interface ListeningScreenProps {
 /** Room for the head, the note, level, time and Stop; the trail has what is left. */
 const aroundTrail = 56 + 72 + 224;
 
+/** Level and time are read at a glance, also on a wide page. */
+const widestRows = 600;
+
 /** The tracker decides a frame this much later; the trail's end waits for it, so that bar and dot stay together. */
 const lookAheadS = 0.16;
 
@@ -36,7 +39,7 @@ export function ListeningScreen({ live, seconds, stopping, onStop }: ListeningSc
       <View style={{ marginTop: 12, marginHorizontal: phone ? -sizes.gutterPhone : 0 }}>
         <LiveTrail live={live} height={Math.max(220, Math.min(560, height - aroundTrail - (phone ? 0 : 40)))} />
       </View>
-      <View style={{ gap: 14, paddingTop: 16, marginTop: "auto" }}>
+      <View style={{ gap: 14, paddingTop: 16, marginTop: "auto", width: "100%", maxWidth: widestRows }}>
         <LiveLevel live={live} />
         <TimeRow seconds={seconds} />
         <Text variant="small" tone="soft" style={{ marginTop: -6, paddingLeft: 56 }}>

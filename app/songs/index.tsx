@@ -31,9 +31,17 @@ export default function SongsRoute() {
   return (
     <Screen
       title="Songs"
-      footer={songs.data?.length === 0 ? undefined : <LinkButton href="/songs/new" label="Add a song" icon="plus" testID="add-song" />}
+      footer={
+        songs.data?.length === 0 ? undefined : (
+          <LinkButton href="/songs/new" label="Add a song" icon="plus" testID="add-song" />
+        )
+      }
     >
-      <QueryState query={songs} title="Your songs could not be opened" skeleton={<Skeleton bars={[{ height: 52 }, { height: 72 }, { height: 72 }]} words="Opening your songs" />}>
+      <QueryState
+        query={songs}
+        title="Your songs could not be opened"
+        skeleton={<Skeleton bars={[{ height: 52 }, { height: 72 }, { height: 72 }]} words="Opening your songs" />}
+      >
         {(all) => <SongShelf songs={all} myKey={myKey} />}
       </QueryState>
     </Screen>

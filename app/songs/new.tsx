@@ -3,5 +3,7 @@ import { EditScreen } from "@/features/songs/EditScreen";
 
 export default function NewSongRoute() {
   const router = useRouter();
-  return <EditScreen song={null} onSaved={(song) => router.replace({ pathname: "/songs/[id]", params: { id: song.id } })} />;
+  return (
+    <EditScreen song={null} onSaved={(song) => router.replace({ pathname: "/songs/[id]", params: { id: song.id } })} />
+  );
 }

@@ -31,7 +31,10 @@ export function InstrumentList() {
                 : "Mark the one you play most. Ways are found for it first; you can choose another one at every song."}
             </Text>
             {save.error && <Notice kind="error">{`${save.error.message} Your instruments are as they were.`}</Notice>}
-            <View role="list" style={webStyle({ display: "grid", gridTemplateColumns: `repeat(${columns}, minmax(0, 1fr))`, gap: 12 })}>
+            <View
+              role="list"
+              style={webStyle({ display: "grid", gridTemplateColumns: `repeat(${columns}, minmax(0, 1fr))`, gap: 12 })}
+            >
               {offered.map((each) => (
                 <InstrumentCard
                   key={each.instrument.id}
@@ -70,13 +73,28 @@ function InstrumentCard({ offered: { instrument, own }, busy, onFavourite, onHan
         <Text variant="small" tone="soft">
           {`${instrument.strings.length} strings, ${Math.round(instrument.scaleMm)} mm, ${instrument.frets} frets`}
         </Text>
-        <View style={{ flexDirection: "row", flexWrap: "wrap", columnGap: 12, alignItems: "center", marginTop: "auto" }}>
+        <View
+          style={{ flexDirection: "row", flexWrap: "wrap", columnGap: 12, alignItems: "center", marginTop: "auto" }}
+        >
           {mine ? (
             <Chip label="I play this" selected />
           ) : (
-            <Button kind="text" small label="I play this" accessibleName={`I play this: ${instrument.name}`} disabled={busy} onPress={onFavourite} style={{ marginLeft: -8 }} />
+            <Button
+              kind="text"
+              small
+              label="I play this"
+              accessibleName={`I play this: ${instrument.name}`}
+              disabled={busy}
+              onPress={onFavourite}
+              style={{ marginLeft: -8 }}
+            />
           )}
-          <Chip label="Left-handed" selected={instrument.leftHanded} onPress={() => onHand(!instrument.leftHanded)} testID={`left-handed-${instrument.id}`} />
+          <Chip
+            label="Left-handed"
+            selected={instrument.leftHanded}
+            onPress={() => onHand(!instrument.leftHanded)}
+            testID={`left-handed-${instrument.id}`}
+          />
         </View>
       </Card>
     </View>

@@ -20,7 +20,9 @@ export function InstrumentSelect({ owned, value, onChange, inline = false }: Ins
       value={value}
       options={offeredInstruments(owned).map(({ instrument, own }) => ({
         value: instrument.id,
-        label: own?.favourite ? `my ${instrument.name.charAt(0).toLowerCase()}${instrument.name.slice(1)}` : instrument.name,
+        label: own?.favourite
+          ? `my ${instrument.name.charAt(0).toLowerCase()}${instrument.name.slice(1)}`
+          : instrument.name,
       }))}
       onChange={onChange}
     />

@@ -23,11 +23,3 @@ export function useSaveInstruments() {
     onSettled: () => client.invalidateQueries({ queryKey: ["instruments"] }),
   });
 }
-
-export function useRemoveInstrument() {
-  const client = useQueryClient();
-  return useMutation({
-    mutationFn: (id: string) => shelf.remove("instruments", id),
-    onSettled: () => client.invalidateQueries({ queryKey: ["instruments"] }),
-  });
-}

@@ -1,6 +1,14 @@
 import { ownInstrument } from "@/shared/contract/instrument";
 import { presets } from "@/shared/instruments/presets";
-import { chosenInstrument, instrumentOf, makeFavourite, offeredInstruments, ownedAs, stringWords, turnHand } from "./myInstruments";
+import {
+  chosenInstrument,
+  instrumentOf,
+  makeFavourite,
+  offeredInstruments,
+  ownedAs,
+  stringWords,
+  turnHand,
+} from "./myInstruments";
 
 let count = 0;
 const newId = () => `7f0b6f0e-6a51-4a8e-9a53-0a3d8f6f3f${String(count++).padStart(2, "0")}`;

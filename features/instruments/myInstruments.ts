@@ -42,13 +42,20 @@ export function chosenInstrument(owned: readonly OwnInstrument[], id: string | n
 
 /** What has to be kept so that one instrument is the favourite and no other is. */
 export function makeFavourite(owned: readonly OwnInstrument[], id: string, newId: () => string): OwnInstrument[] {
-  const before = owned.filter((own) => own.favourite && instrumentOf(own).id !== id).map((own) => ({ ...own, favourite: false }));
+  const before = owned
+    .filter((own) => own.favourite && instrumentOf(own).id !== id)
+    .map((own) => ({ ...own, favourite: false }));
   const own = ownedAs(owned, id, newId);
   return own.favourite && owned.includes(own) ? before : [...before, { ...own, favourite: true }];
 }
 
 /** The same instrument for the other hand. */
-export function turnHand(owned: readonly OwnInstrument[], id: string, leftHanded: boolean, newId: () => string): OwnInstrument {
+export function turnHand(
+  owned: readonly OwnInstrument[],
+  id: string,
+  leftHanded: boolean,
+  newId: () => string,
+): OwnInstrument {
   return { ...ownedAs(owned, id, newId), leftHanded };
 }
 
@@ -57,7 +64,13 @@ export function ownedAs(owned: readonly OwnInstrument[], id: string, newId: () =
   const own = owned.find((each) => instrumentOf(each).id === id);
   if (own) return own;
   const { fretMap, ...preset } = chosenInstrument(owned, id);
-  return { ...preset, id: newId(), presetId: preset.id, favourite: false, ...(fretMap === undefined ? null : { fretMap }) };
+  return {
+    ...preset,
+    id: newId(),
+    presetId: preset.id,
+    favourite: false,
+    ...(fretMap === undefined ? null : { fretMap }),
+  };
 }
 
 /** Name and tuning: names that hold the tuning say it once. */

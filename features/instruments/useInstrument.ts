@@ -7,7 +7,12 @@ import { instrumentQueries, useSaveInstruments } from "./instrumentQueries";
 import { chosenInstrument, makeFavourite } from "./myInstruments";
 
 /** The instrument in hand. Choosing another makes it the favourite, so that every page speaks of it from then on. */
-export function useInstrument(): { instrument: Instrument; owned: readonly OwnInstrument[]; choose: (id: string) => void; error: Error | null } {
+export function useInstrument(): {
+  instrument: Instrument;
+  owned: readonly OwnInstrument[];
+  choose: (id: string) => void;
+  error: Error | null;
+} {
   const query = useQuery(instrumentQueries.all());
   const save = useSaveInstruments();
   const [chosen, setChosen] = useState<string | null>(null);

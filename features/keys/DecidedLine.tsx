@@ -17,7 +17,16 @@ export function DecidedLine({ decision, saving, onUndo }: DecidedLineProps) {
       <Text variant="small" tone="soft" style={{ flexShrink: 1 }}>
         {`Your key since ${decidedOn(decision)}. ${decision.reason}`}
       </Text>
-      <Button kind="text" small label="Undo" accessibleName="Undo my key" disabled={saving} onPress={onUndo} testID="undo-key" style={{ marginVertical: -6 }} />
+      <Button
+        kind="text"
+        small
+        label="Undo"
+        accessibleName="Undo my key"
+        disabled={saving}
+        onPress={onUndo}
+        testID="undo-key"
+        style={{ marginVertical: -6 }}
+      />
     </View>
   );
 }

@@ -48,17 +48,52 @@ export function KeyColumn({ rows, voice, selected, onSelect }: KeyColumnProps) {
               testID={`key-${row.key.tonic}`}
               {...webProps(keys(index))}
               style={[
-                { height: rowHeight, flexDirection: "row", alignItems: "center", borderTopWidth: 1, borderColor: colors.line, backgroundColor: on ? colors.card : "transparent", paddingLeft: 10 },
+                {
+                  height: rowHeight,
+                  flexDirection: "row",
+                  alignItems: "center",
+                  borderTopWidth: 1,
+                  borderColor: colors.line,
+                  backgroundColor: on ? colors.card : "transparent",
+                  paddingLeft: 10,
+                },
                 webStyle(on ? { boxShadow: `inset 4px 0 0 ${colors.plum}` } : {}),
               ]}
             >
-              <Text style={{ width: 56, fontFamily: fonts.display, fontWeight: "700", fontSize: 20, lineHeight: 24, color: row.beyond ? colors.inkSoft : colors.ink }}>{row.sign}</Text>
+              <Text
+                style={{
+                  width: 56,
+                  fontFamily: fonts.display,
+                  fontWeight: "700",
+                  fontSize: 20,
+                  lineHeight: 24,
+                  color: row.beyond ? colors.inkSoft : colors.ink,
+                }}
+              >
+                {row.sign}
+              </Text>
               <View aria-hidden style={{ width: spanWidth }}>
-                <KeySpan voice={voice} marks={row.marks} scale={scale} perSemitone={step} height={rowHeight - 1} spelling={spellingIn(row.key)} selected={on} />
+                <KeySpan
+                  voice={voice}
+                  marks={row.marks}
+                  scale={scale}
+                  perSemitone={step}
+                  height={rowHeight - 1}
+                  spelling={spellingIn(row.key)}
+                  selected={on}
+                />
               </View>
               <Text
                 tone={row.beyond ? "brick" : on ? "lagoon" : "ink"}
-                style={{ flexGrow: 1, textAlign: "right", paddingRight: 10, fontFamily: fonts.display, fontWeight: "600", fontSize: on ? 20 : 16, lineHeight: 24 }}
+                style={{
+                  flexGrow: 1,
+                  textAlign: "right",
+                  paddingRight: 10,
+                  fontFamily: fonts.display,
+                  fontWeight: "600",
+                  fontSize: on ? 20 : 16,
+                  lineHeight: 24,
+                }}
               >
                 {row.score}
               </Text>
@@ -68,7 +103,15 @@ export function KeyColumn({ rows, voice, selected, onSelect }: KeyColumnProps) {
       </View>
       <View aria-hidden style={{ height: 22, borderTopWidth: 1, borderColor: colors.line }}>
         {names.map(({ name, x }) => (
-          <Text key={name} variant="mono" tone="lagoon" style={[{ position: "absolute", left: x, fontSize: 12, lineHeight: 22 }, webStyle({ transform: "translateX(-50%)" })]}>
+          <Text
+            key={name}
+            variant="mono"
+            tone="lagoon"
+            style={[
+              { position: "absolute", left: x, fontSize: 12, lineHeight: 22 },
+              webStyle({ transform: "translateX(-50%)" }),
+            ]}
+          >
             {name}
           </Text>
         ))}

@@ -36,7 +36,11 @@ export function KeyDeck({ rows, voice, selected, onSelect }: KeyDeckProps) {
     shown.current = at;
     const card = cards.current[at];
     const box = deck.current;
-    if (card && box) box.scrollTo({ left: card.offsetLeft - (box.clientWidth - card.clientWidth) / 2, behavior: first ? "instant" : "smooth" });
+    if (card && box)
+      box.scrollTo({
+        left: card.offsetLeft - (box.clientWidth - card.clientWidth) / 2,
+        behavior: first ? "instant" : "smooth",
+      });
   }, [at]);
 
   const onScroll = () => {
@@ -96,11 +100,20 @@ export function KeyDeck({ rows, voice, selected, onSelect }: KeyDeckProps) {
 /** One key in full: score, its reason, the span, and the five parts. */
 function KeyCard({ row, voice, selected }: { row: KeyRow; voice: SingingVoice; selected: boolean }) {
   return (
-    <Card selected={selected} {...(selected ? { testID: "key-card" } : null)} style={{ flexGrow: 1, padding: selected ? 14 : 15 }}>
+    <Card
+      selected={selected}
+      {...(selected ? { testID: "key-card" } : null)}
+      style={{ flexGrow: 1, padding: selected ? 14 : 15 }}
+    >
       <View style={{ flexDirection: "row", justifyContent: "space-between", alignItems: "flex-end" }}>
-        <Text style={{ fontFamily: fonts.display, fontWeight: "700", fontSize: 52, lineHeight: 46, letterSpacing: -1 }}>{row.sign}</Text>
+        <Text style={{ fontFamily: fonts.display, fontWeight: "700", fontSize: 52, lineHeight: 46, letterSpacing: -1 }}>
+          {row.sign}
+        </Text>
         <Text variant="small" tone="soft">
-          <Text tone={row.beyond ? "brick" : "lagoon"} style={{ fontFamily: fonts.display, fontWeight: "700", fontSize: 36, lineHeight: 36 }}>
+          <Text
+            tone={row.beyond ? "brick" : "lagoon"}
+            style={{ fontFamily: fonts.display, fontWeight: "700", fontSize: 36, lineHeight: 36 }}
+          >
             {row.score}
           </Text>
           {" of 100"}
@@ -130,4 +143,10 @@ const strip: CSSProperties = {
   outlineOffset: -2,
   position: "relative",
 };
-const place: CSSProperties = { flex: "0 0 min(302px, calc(100% - 0px))", scrollSnapAlign: "center", display: "flex", flexDirection: "column", minWidth: 0 };
+const place: CSSProperties = {
+  flex: "0 0 min(302px, calc(100% - 0px))",
+  scrollSnapAlign: "center",
+  display: "flex",
+  flexDirection: "column",
+  minWidth: 0,
+};

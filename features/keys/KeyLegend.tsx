@@ -17,7 +17,17 @@ export function KeyLegend() {
         <Rect x={1} y={1} width={10} height={14} rx={3} fill={`url(#${id})`} stroke={colors.honey} />
       </Item>
       <Item words="beyond, ▲ above, ▼ below">
-        <Rect x={1} y={1} width={10} height={14} rx={3} fill="none" stroke={colors.brick} strokeWidth={1.5} strokeDasharray="1.5 2" />
+        <Rect
+          x={1}
+          y={1}
+          width={10}
+          height={14}
+          rx={3}
+          fill="none"
+          stroke={colors.brick}
+          strokeWidth={1.5}
+          strokeDasharray="1.5 2"
+        />
       </Item>
       <Item words="home note">
         <Rect x={1} width={10} height={16} rx={3} fill={colors.lagoon} />

@@ -23,10 +23,23 @@ const nextShown = 4;
 export function KeyList({ rows, voice, selected, onSelect }: KeyListProps) {
   const [all, setAll] = useState(false);
   const shown = all ? rows : rows.filter((row) => row !== selected).slice(0, nextShown);
-  const scale = commonScale(shown.filter((row) => !row.beyond), voice);
+  const scale = commonScale(
+    shown.filter((row) => !row.beyond),
+    voice,
+  );
   return (
     <View style={{ marginTop: 12 }}>
-      <View aria-hidden style={{ flexDirection: "row", gap: 10, alignItems: "flex-end", paddingBottom: 4, borderBottomWidth: 1, borderColor: colors.line }}>
+      <View
+        aria-hidden
+        style={{
+          flexDirection: "row",
+          gap: 10,
+          alignItems: "flex-end",
+          paddingBottom: 4,
+          borderBottomWidth: 1,
+          borderColor: colors.line,
+        }}
+      >
         <Text variant="tiny" tone="soft" style={{ width: 44 }}>
           {all ? "All" : "Next"}
         </Text>
@@ -40,13 +53,21 @@ export function KeyList({ rows, voice, selected, onSelect }: KeyListProps) {
           <View role="listitem" key={row.shift} style={{ borderBottomWidth: 1, borderColor: colors.line }}>
             <Pressable
               role="button"
-              aria-label={row.spoken}
               onPress={() => onSelect(row)}
               testID={`key-${row.key.tonic}`}
               {...webProps({ "aria-pressed": row === selected })}
-              style={{ minHeight: 48, flexDirection: "row", gap: 10, alignItems: "center", paddingVertical: 4, backgroundColor: row === selected ? colors.card : "transparent" }}
+              style={{
+                minHeight: 48,
+                flexDirection: "row",
+                gap: 10,
+                alignItems: "center",
+                paddingVertical: 4,
+                backgroundColor: row === selected ? colors.card : "transparent",
+              }}
             >
-              <Text style={{ width: 44, fontFamily: fonts.display, fontWeight: "700", fontSize: 20, lineHeight: 24 }}>{row.sign}</Text>
+              <Text style={{ width: 44, fontFamily: fonts.display, fontWeight: "700", fontSize: 20, lineHeight: 24 }}>
+                {row.sign}
+              </Text>
               <View aria-hidden>
                 <VoiceStrip voice={voice} marks={row.marks} scale={scale} width={112} spelling={spellingIn(row.key)} />
               </View>
@@ -60,7 +81,15 @@ export function KeyList({ rows, voice, selected, onSelect }: KeyListProps) {
           </View>
         ))}
       </View>
-      <Button kind="text" icon={all ? "up" : "forward"} label={all ? "Fewer keys" : "All 12 keys"} expanded={all} onPress={() => setAll(!all)} testID="all-keys" style={{ alignSelf: "flex-start", marginLeft: -8 }} />
+      <Button
+        kind="text"
+        icon={all ? "up" : "forward"}
+        label={all ? "Fewer keys" : "All 12 keys"}
+        expanded={all}
+        onPress={() => setAll(!all)}
+        testID="all-keys"
+        style={{ alignSelf: "flex-start", marginLeft: -8 }}
+      />
     </View>
   );
 }

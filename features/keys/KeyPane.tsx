@@ -3,6 +3,7 @@ import { View } from "react-native";
 import { Heading } from "@/features/ui/Heading";
 import { Text } from "@/features/ui/Text";
 import { webStyle } from "@/features/ui/webStyle";
+import type { Song } from "@/shared/contract/song";
 import { DecidedLine } from "./DecidedLine";
 import { KeyColumn } from "./KeyColumn";
 import type { KeyRow } from "./keyRows";
@@ -11,42 +12,59 @@ import { partWords } from "./partWords";
 import type { SongKeys } from "./useSongKeys";
 
 export interface KeyPaneProps {
-  songId: string;
-  hasTune: boolean;
+  song: Song;
   keys: SongKeys;
-  voiceName: string | null;
+  singer: { name: string } | null;
   selected: KeyRow | null;
-  onSelect: (row: KeyRow) => void;
+  onSelect: (shift: number) => void;
 }
 
 /** The middle column of a wide song page. */
-export function KeyPane({ songId, hasTune, keys: { rows, voice, decision, saving, undo }, voiceName, selected, onSelect }: KeyPaneProps) {
+export function KeyPane({
+  song,
+  keys: { rows, voice, decision, saving, undo },
+  singer,
+  selected,
+  onSelect,
+}: KeyPaneProps) {
   return (
     <View testID="key-pane">
-      <View style={{ flexDirection: "row", justifyContent: "space-between", alignItems: "baseline", minHeight: 28, marginBottom: 10 }}>
+      <View
+        style={{
+          flexDirection: "row",
+          justifyContent: "space-between",
+          alignItems: "baseline",
+          minHeight: 28,
+          marginBottom: 10,
+        }}
+      >
         <Heading level={2}>Keys</Heading>
-        {voiceName !== null && (
+        {singer && (
           <Text variant="small" tone="soft" style={{ fontSize: 13 }}>
-            {`for ${voiceName}`}
+            {`for ${singer.name}`}
           </Text>
         )}
       </View>
       {rows && voice ? (
         <>
-          <KeyColumn rows={rows} voice={voice} selected={selected} onSelect={onSelect} />
+          <KeyColumn rows={rows} voice={voice} selected={selected} onSelect={(row) => onSelect(row.shift)} />
           {selected && (
             <Text variant="small" style={{ paddingTop: 8 }}>
               <Text style={{ fontWeight: "600" }}>{`What makes ${selected.score}: `}</Text>
               {partWords(selected.parts)}
               {selected.coarse ? " Coarse, because only the span of the tune is known." : ""}{" "}
-              <Link href={{ pathname: "/songs/[id]/keys", params: { id: songId } }} style={webStyle(link)} testID="all-twelve">
+              <Link
+                href={{ pathname: "/songs/[id]/keys", params: { id: song.id } }}
+                style={webStyle(link)}
+                testID="all-twelve"
+              >
                 All twelve side by side
               </Link>
             </Text>
           )}
         </>
       ) : (
-        <KeysMissing songId={songId} missing={hasTune ? "voice" : "tune"} />
+        <KeysMissing songId={song.id} missing={song.tune ? "voice" : "tune"} />
       )}
       {decision && (
         <View style={{ marginTop: 12 }}>
@@ -57,4 +75,9 @@ export function KeyPane({ songId, hasTune, keys: { rows, voice, decision, saving
   );
 }
 
-const link = { color: "var(--plum)", fontWeight: 600, textDecorationLine: "underline", textUnderlineOffset: 3 } as const;
+const link = {
+  color: "var(--plum)",
+  fontWeight: 600,
+  textDecorationLine: "underline",
+  textUnderlineOffset: 3,
+} as const;

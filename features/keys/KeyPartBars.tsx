@@ -9,7 +9,10 @@ import { partNames } from "./partWords";
 /** The five parts of a score, each as points of its most and as a bar. */
 export function KeyPartBars({ parts }: { parts: KeyParts }) {
   return (
-    <View role="list" style={{ flexGrow: 1, flexShrink: 1, flexBasis: 88, minWidth: 0, justifyContent: "space-between", gap: 7 }}>
+    <View
+      role="list"
+      style={{ flexGrow: 1, flexShrink: 1, flexBasis: 88, minWidth: 0, justifyContent: "space-between", gap: 7 }}
+    >
       {partNames.map(({ part, name }) => (
         <View role="listitem" key={part}>
           <Text variant="tiny" tone="soft" style={{ fontWeight: "500", lineHeight: 15 }}>
@@ -21,8 +24,21 @@ export function KeyPartBars({ parts }: { parts: KeyParts }) {
             </Text>
             <Text variant="tiny" tone="soft">{`of ${partMaxima[part]}`}</Text>
           </View>
-          <View aria-hidden style={[{ height: 6, borderRadius: 3, marginTop: 2, overflow: "hidden" }, webStyle({ boxShadow: "inset 0 0 0 1px color-mix(in srgb, var(--inkSoft) 60%, var(--line))" })]}>
-            <View style={{ height: 6, borderRadius: 3, backgroundColor: colors.lagoon, width: `${(100 * parts[part]) / partMaxima[part]}%` }} />
+          <View
+            aria-hidden
+            style={[
+              { height: 6, borderRadius: 3, marginTop: 2, overflow: "hidden" },
+              webStyle({ boxShadow: "inset 0 0 0 1px color-mix(in srgb, var(--inkSoft) 60%, var(--line))" }),
+            ]}
+          >
+            <View
+              style={{
+                height: 6,
+                borderRadius: 3,
+                backgroundColor: colors.lagoon,
+                width: `${(100 * parts[part]) / partMaxima[part]}%`,
+              }}
+            />
           </View>
         </View>
       ))}

@@ -78,7 +78,17 @@ test("a key is chosen by its radio button or anywhere in its row", () => {
 
 test("a way that is still searched, one found and none are told apart", () => {
   const [first, second] = rows;
-  render(<Page wayOf={(row) => (row === first ? undefined : row === second ? { title: "Capo 5, shapes of G", cost: "easy, nothing retuned" } : null)} />);
+  render(
+    <Page
+      wayOf={(row) =>
+        row === first
+          ? undefined
+          : row === second
+            ? { title: "Capo 5, shapes of G", cost: "easy, nothing retuned" }
+            : null
+      }
+    />,
+  );
   expect(bodyRows()[0]?.textContent).toContain("Searching");
   expect(bodyRows()[1]?.textContent).toContain("Capo 5, shapes of Geasy, nothing retuned");
   expect(bodyRows()[2]?.textContent).toContain("None found");

@@ -46,8 +46,19 @@ export function KeyTable({ rows, voice, selected, onSelect, order, onOrder, wayO
   const sorted = (by: KeyOrder) => (order === by ? (by === "move" ? "ascending" : "descending") : undefined);
   return (
     <div style={fits ? roomy : scrolling} data-testid="key-table">
-      <table style={{ width: tableWidth, tableLayout: "fixed", borderCollapse: "separate", borderSpacing: 0, font: `400 14px/20px ${fonts.text}`, color: colors.ink }}>
-        <caption style={unseen}>All twelve keys for your voice, each with its score and its span against your voice</caption>
+      <table
+        style={{
+          width: tableWidth,
+          tableLayout: "fixed",
+          borderCollapse: "separate",
+          borderSpacing: 0,
+          font: `400 14px/20px ${fonts.text}`,
+          color: colors.ink,
+        }}
+      >
+        <caption style={unseen}>
+          All twelve keys for your voice, each with its score and its span against your voice
+        </caption>
         <colgroup>
           {widths.map((width, index) => (
             <col key={index} style={{ width }} />
@@ -84,8 +95,23 @@ export function KeyTable({ rows, voice, selected, onSelect, order, onOrder, wayO
         </thead>
         <tbody>
           {rows.map((row) => (
-            <Row key={row.shift} row={row} group={group} on={row === selected} onSelect={() => onSelect(row)} way={wayOf(row)}>
-              <KeySpan voice={voice} marks={row.marks} scale={scale} perSemitone={step} height={51} spelling={spellingIn(row.key)} selected={row === selected} />
+            <Row
+              key={row.shift}
+              row={row}
+              group={group}
+              on={row === selected}
+              onSelect={() => onSelect(row)}
+              way={wayOf(row)}
+            >
+              <KeySpan
+                voice={voice}
+                marks={row.marks}
+                scale={scale}
+                perSemitone={step}
+                height={51}
+                spelling={spellingIn(row.key)}
+                selected={row === selected}
+              />
             </Row>
           ))}
         </tbody>
@@ -94,14 +120,40 @@ export function KeyTable({ rows, voice, selected, onSelect, order, onOrder, wayO
   );
 }
 
-function Row({ row, group, on, onSelect, way, children }: { row: KeyRow; group: string; on: boolean; onSelect: () => void; way: TableWay; children: ReactNode }) {
+function Row({
+  row,
+  group,
+  on,
+  onSelect,
+  way,
+  children,
+}: {
+  row: KeyRow;
+  group: string;
+  on: boolean;
+  onSelect: () => void;
+  way: TableWay;
+  children: ReactNode;
+}) {
   const ground = on ? colors.card : colors.paper;
   const td: CSSProperties = { ...cell, background: ground, borderBottom: `1px solid ${colors.line}`, height: 50 };
   const faint = row.beyond ? colors.inkSoft : colors.ink;
   return (
     <tr onClick={onSelect} style={{ cursor: "pointer" }} data-testid={`key-row-${row.key.tonic}`}>
       <td style={{ ...td, ...firstColumn, boxShadow: on ? `-12px 0 0 ${colors.card}` : undefined }}>
-        {on && <span style={{ position: "absolute", left: -12, top: 0, bottom: 0, width: 4, borderRadius: 2, background: colors.plum }} />}
+        {on && (
+          <span
+            style={{
+              position: "absolute",
+              left: -12,
+              top: 0,
+              bottom: 0,
+              width: 4,
+              borderRadius: 2,
+              background: colors.plum,
+            }}
+          />
+        )}
         <input
           type="radio"
           name={group}
@@ -112,20 +164,45 @@ function Row({ row, group, on, onSelect, way, children }: { row: KeyRow; group: 
         />
       </td>
       <th scope="row" style={{ ...td, ...secondColumn, textAlign: "left", fontWeight: 400 }}>
-        <span style={{ font: `700 26px/1 ${fonts.display}`, display: "inline-block", minWidth: 40, color: faint }}>{setSigns(row.sign)}</span>
-        <span style={{ font: `500 12px/1 ${fonts.text}`, color: colors.inkSoft, whiteSpace: "nowrap" }}>{row.moved}</span>
+        <span style={{ font: `700 26px/1 ${fonts.display}`, display: "inline-block", minWidth: 40, color: faint }}>
+          {setSigns(row.sign)}
+        </span>
+        <span style={{ font: `500 12px/1 ${fonts.text}`, color: colors.inkSoft, whiteSpace: "nowrap" }}>
+          {row.moved}
+        </span>
       </th>
       <td style={td}>
         <div style={{ display: "grid", gridTemplateColumns: "46px 1fr", alignItems: "center" }}>
-          <span data-testid="key-score" style={{ font: `${on ? 700 : 600} ${on ? 26 : 20}px/1 ${fonts.display}`, color: row.beyond ? colors.brick : on ? colors.lagoon : colors.ink }}>{row.score}</span>
-          <span style={{ font: `400 13px/16px ${fonts.text}`, color: on ? colors.ink : colors.inkSoft, paddingRight: 12 }}>{setSigns(row.reason.replace(/\.$/, ""))}</span>
+          <span
+            data-testid="key-score"
+            style={{
+              font: `${on ? 700 : 600} ${on ? 26 : 20}px/1 ${fonts.display}`,
+              color: row.beyond ? colors.brick : on ? colors.lagoon : colors.ink,
+            }}
+          >
+            {row.score}
+          </span>
+          <span
+            style={{ font: `400 13px/16px ${fonts.text}`, color: on ? colors.ink : colors.inkSoft, paddingRight: 12 }}
+          >
+            {setSigns(row.reason.replace(/\.$/, ""))}
+          </span>
         </div>
       </td>
       <td style={{ ...td, padding: 0, lineHeight: 0 }}>{children}</td>
       <RoomCell room={row.below} style={td} strong={on} />
       <RoomCell room={row.above} style={td} strong={on} />
       <td style={{ ...td, paddingLeft: 8 }}>
-        <div data-mono style={{ display: "grid", gridTemplateColumns: "repeat(4, 36px)", font: `${on ? 600 : 400} 14px/20px ${fonts.mono}`, color: faint, whiteSpace: "nowrap" }}>
+        <div
+          data-mono
+          style={{
+            display: "grid",
+            gridTemplateColumns: "repeat(4, 36px)",
+            font: `${on ? 600 : 400} 14px/20px ${fonts.mono}`,
+            color: faint,
+            whiteSpace: "nowrap",
+          }}
+        >
           {row.chords.map((chord) => (
             <span key={chord}>{setSigns(chord)}</span>
           ))}
@@ -140,8 +217,12 @@ function Row({ row, group, on, onSelect, way, children }: { row: KeyRow; group: 
           <span style={{ color: colors.inkSoft }}>None found</span>
         ) : (
           <>
-            <span style={{ display: "block", font: `${on ? 600 : 500} 14px/17px ${fonts.text}`, color: faint }}>{setSigns(way.title)}</span>
-            <span style={{ display: "block", font: `400 12px/15px ${fonts.text}`, color: colors.inkSoft }}>{way.cost}</span>
+            <span style={{ display: "block", font: `${on ? 600 : 500} 14px/17px ${fonts.text}`, color: faint }}>
+              {setSigns(way.title)}
+            </span>
+            <span style={{ display: "block", font: `400 12px/15px ${fonts.text}`, color: colors.inkSoft }}>
+              {way.cost}
+            </span>
           </>
         )}
       </td>
@@ -151,10 +232,22 @@ function Row({ row, group, on, onSelect, way, children }: { row: KeyRow; group: 
 
 function RoomCell({ room, style, strong }: { room: Room; style: CSSProperties; strong: boolean }) {
   const color = { ink: colors.ink, honey: colors.honeyText, brick: colors.brick }[room.tone];
-  return <td style={{ ...style, textAlign: "center", font: `${strong ? 600 : 400} 14px/1 ${fonts.mono}`, color }}>{room.text}</td>;
+  return (
+    <td style={{ ...style, textAlign: "center", font: `${strong ? 600 : 400} 14px/1 ${fonts.mono}`, color }}>
+      {room.text}
+    </td>
+  );
 }
 
-const unseen: CSSProperties = { position: "absolute", width: 1, height: 1, margin: -1, overflow: "hidden", clipPath: "inset(50%)", whiteSpace: "nowrap" };
+const unseen: CSSProperties = {
+  position: "absolute",
+  width: 1,
+  height: 1,
+  margin: -1,
+  overflow: "hidden",
+  clipPath: "inset(50%)",
+  whiteSpace: "nowrap",
+};
 const cell: CSSProperties = { padding: 0, boxSizing: "border-box", verticalAlign: "middle" };
 const th: CSSProperties = {
   position: "sticky",
@@ -169,6 +262,22 @@ const th: CSSProperties = {
 };
 const firstColumn: CSSProperties = { position: "sticky", left: 0, zIndex: 1 };
 const secondColumn: CSSProperties = { position: "sticky", left: 28, zIndex: 1 };
-const sorter: CSSProperties = { font: "inherit", color: "inherit", background: "none", border: 0, padding: 0, minHeight: 32, width: "100%", cursor: "pointer", display: "block" };
+const sorter: CSSProperties = {
+  font: "inherit",
+  color: "inherit",
+  background: "none",
+  border: 0,
+  padding: 0,
+  minHeight: 32,
+  width: "100%",
+  cursor: "pointer",
+  display: "block",
+};
 const roomy: CSSProperties = { position: "relative" };
-const scrolling: CSSProperties = { position: "relative", overflow: "auto", maxHeight: "calc(100dvh - 48px)", paddingLeft: 12, marginLeft: -12 };
+const scrolling: CSSProperties = {
+  position: "relative",
+  overflow: "auto",
+  maxHeight: "calc(100dvh - 48px)",
+  paddingLeft: 12,
+  marginLeft: -12,
+};

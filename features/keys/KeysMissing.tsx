@@ -23,7 +23,14 @@ export function KeysMissing({ songId, missing }: { songId: string; missing: "voi
       testID="keys-need-tune"
       title="The melody is not known yet"
       text="Keys are judged by where the melody lies in your voice. Its lowest and highest note are enough; a melody file says more."
-      action={<LinkButton href={{ pathname: "/songs/[id]/edit", params: { id: songId } }} label="Give the melody" icon="edit" small />}
+      action={
+        <LinkButton
+          href={{ pathname: "/songs/[id]/edit", params: { id: songId } }}
+          label="Give the melody"
+          icon="edit"
+          small
+        />
+      }
     />
   );
 }

@@ -45,20 +45,29 @@ export function KeysScreen({ song, keys, pending, voice, wayOf, instrument }: Ke
       {
         tonic: row.key.tonic,
         shift: row.shift,
-        voiceId: voice?.id ?? null,
         instrument: instrument.id,
         way: isMine && decision?.instrument === instrument.id ? decision.way : null,
       },
       done,
     );
-  const waysOf = (row: KeyRow) => ({ pathname: "/songs/[id]/ways" as const, params: { id: song.id, key: row.key.tonic, shift: String(row.shift) } });
+  const waysOf = (row: KeyRow) => ({
+    pathname: "/songs/[id]/ways" as const,
+    params: { id: song.id, key: row.key.tonic, shift: String(row.shift) },
+  });
   const phone = layout === "phone";
   const wide = layout === "wide";
   const back = { label: song.title, href: { pathname: "/songs/[id]" as const, params: { id: song.id } } };
   const actions = selected && (
     <>
       <LinkButton kind="secondary" small href={waysOf(selected)} label={`Ways to play ${selected.sign}`} />
-      <Button small disabled={isMine} busy={keys.saving} label={isMine ? `${selected.sign} is my key` : `Make ${selected.sign} my key`} onPress={() => take(selected)} testID="take-key" />
+      <Button
+        small
+        disabled={isMine}
+        busy={keys.saving}
+        label={isMine ? `${selected.sign} is my key` : `Make ${selected.sign} my key`}
+        onPress={() => take(selected)}
+        testID="take-key"
+      />
     </>
   );
   return (
@@ -69,7 +78,12 @@ export function KeysScreen({ song, keys, pending, voice, wayOf, instrument }: Ke
       wide
       actions={phone ? undefined : actions}
     >
-      {keys.error && <Notice kind="error" title="Your key is not saved">{`${keys.error.message} The keys are still here; try again.`}</Notice>}
+      {keys.error && (
+        <Notice
+          kind="error"
+          title="Your key is not saved"
+        >{`${keys.error.message} The keys are still here; try again.`}</Notice>
+      )}
       {pending ? (
         <Skeleton bars={[{ height: 372 }, { height: 56 }, { height: 48 }, { height: 48 }]} words="Scoring the keys" />
       ) : !rows || !keys.voice || !selected ? (
@@ -85,7 +99,14 @@ export function KeysScreen({ song, keys, pending, voice, wayOf, instrument }: Ke
             <>
               <Text tone="soft" style={{ lineHeight: 32, marginBottom: 10 }}>
                 {"Show the "}
-                <Select inline label="Order of the keys" value={order} options={keyOrders} onChange={setOrder} testID="key-order" />
+                <Select
+                  inline
+                  label="Order of the keys"
+                  value={order}
+                  options={keyOrders}
+                  onChange={setOrder}
+                  testID="key-order"
+                />
                 {", played on "}
                 {instrument.chooser}.
               </Text>
@@ -108,7 +129,9 @@ export function KeysScreen({ song, keys, pending, voice, wayOf, instrument }: Ke
                 <Button
                   label={`Use ${selected.sign}, see ways to play it`}
                   busy={keys.saving}
-                  onPress={() => (isMine ? router.push(waysOf(selected)) : take(selected, () => router.push(waysOf(selected))))}
+                  onPress={() =>
+                    isMine ? router.push(waysOf(selected)) : take(selected, () => router.push(waysOf(selected)))
+                  }
                   testID="take-key"
                   style={{ marginTop: 12 }}
                 />

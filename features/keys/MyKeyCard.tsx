@@ -28,20 +28,43 @@ export function MyKeyCard({ songId, inHand, voice }: MyKeyCardProps) {
   const stripWidth = Math.min(176, Math.max(96, useWindowDimensions().width - 222));
   const name = (midi: number) => glyphs(noteName(midi, spellingIn(key)));
   return (
-    <Link href={{ pathname: "/songs/[id]/keys", params: { id: songId } }} testID="my-key" style={webStyle({ display: "flex" })}>
-      <Card style={{ flexGrow: 1, flexShrink: 1, minWidth: 0, flexDirection: "row", alignItems: "center", gap: 14, paddingVertical: 12, paddingHorizontal: 14 }}>
-        <Text style={{ fontFamily: fonts.display, fontWeight: "700", fontSize: 36, lineHeight: 40 }}>{glyphs(keySign(key))}</Text>
+    <Link
+      href={{ pathname: "/songs/[id]/keys", params: { id: songId } }}
+      testID="my-key"
+      style={webStyle({ display: "flex" })}
+    >
+      <Card
+        style={{
+          flexGrow: 1,
+          flexShrink: 1,
+          minWidth: 0,
+          flexDirection: "row",
+          alignItems: "center",
+          gap: 14,
+          paddingVertical: 12,
+          paddingHorizontal: 14,
+        }}
+      >
+        <Text style={{ fontFamily: fonts.display, fontWeight: "700", fontSize: 36, lineHeight: 40 }}>
+          {glyphs(keySign(key))}
+        </Text>
         <View style={{ flexGrow: 1, flexShrink: 1, flexBasis: 0, minWidth: 0, gap: 4 }}>
           <Text variant="small">
             <Text style={{ fontWeight: "600" }}>{before[because]}</Text>
             {because === "written" ? ". See which key suits your voice." : `, ${moveWords(shift)}`}
           </Text>
           {row && voice && (
-            <View style={{ flexDirection: "row", alignItems: "center", gap: 6}}>
+            <View style={{ flexDirection: "row", alignItems: "center", gap: 6 }}>
               <Text tone="soft" style={end}>
                 {name(row.lowMidi)}
               </Text>
-              <VoiceStrip voice={voice} marks={row.marks} scale={commonScale([row], voice)} width={stripWidth} spelling={spellingIn(key)} />
+              <VoiceStrip
+                voice={voice}
+                marks={row.marks}
+                scale={commonScale([row], voice)}
+                width={stripWidth}
+                spelling={spellingIn(key)}
+              />
               <Text tone="soft" style={end}>
                 {name(row.highMidi)}
               </Text>

@@ -20,9 +20,20 @@ export function PeekCard({ row, voice, side }: { row: KeyRow; voice: SingingVoic
   const y = (midi: number) => yOf(midi, scale, step, pad);
   const rungs = Array.from({ length: scale.high - scale.low + 1 }, (_, index) => scale.low + index).filter(isNatural);
   return (
-    <Card style={{ flexGrow: 1, padding: 0, alignItems: side === "left" ? "flex-start" : "flex-end", overflow: "hidden" }}>
+    <Card
+      style={{ flexGrow: 1, padding: 0, alignItems: side === "left" ? "flex-start" : "flex-end", overflow: "hidden" }}
+    >
       <View style={{ width, alignItems: "center", paddingTop: 18, height: 120 }}>
-        <Text style={{ fontFamily: fonts.display, fontWeight: "700", fontSize: row.sign.length > 2 ? 15 : 20, lineHeight: 24 }}>{row.sign}</Text>
+        <Text
+          style={{
+            fontFamily: fonts.display,
+            fontWeight: "700",
+            fontSize: row.sign.length > 2 ? 15 : 20,
+            lineHeight: 24,
+          }}
+        >
+          {row.sign}
+        </Text>
         <Text variant="mono" tone="soft" style={{ fontSize: 12, lineHeight: 18 }}>
           {row.score}
         </Text>
@@ -30,11 +41,25 @@ export function PeekCard({ row, voice, side }: { row: KeyRow; voice: SingingVoic
       <Svg width={width} height={y(scale.low) + pad} aria-hidden>
         <Hatch id={id} pitch={4} line={1.6} />
         {rungs.map((midi) => (
-          <Line key={midi} x1={0} x2={width} y1={y(midi)} y2={y(midi)} stroke={midi % 12 === 0 ? mixtures.rungC : colors.line} strokeWidth={1} />
+          <Line
+            key={midi}
+            x1={0}
+            x2={width}
+            y1={y(midi)}
+            y2={y(midi)}
+            stroke={midi % 12 === 0 ? mixtures.rungC : colors.line}
+            strokeWidth={1}
+          />
         ))}
         {row.marks.map((mark) => {
           const long = Math.min(60, Math.max(8, mark.share * 400));
-          const box = { x: side === "left" ? 10 : width - 10 - long, y: y(mark.midi) - 4, width: long, height: 8, rx: 4 };
+          const box = {
+            x: side === "left" ? 10 : width - 10 - long,
+            y: y(mark.midi) - 4,
+            width: long,
+            height: 8,
+            rx: 4,
+          };
           if (mark.zone === "comfort") return <Rect key={mark.midi} {...box} fill={colors.ink} />;
           return (
             <G key={mark.midi}>

@@ -8,7 +8,13 @@ export function ShelfStrip({ row, singing }: { row: KeyRow; singing: SingingVoic
   const voice = wholeVoice(singing);
   return (
     <View aria-hidden>
-      <VoiceStrip voice={voice} marks={row.marks} scale={commonScale([], voice)} width={120} spelling={spellingIn(row.key)} />
+      <VoiceStrip
+        voice={voice}
+        marks={row.marks}
+        scale={commonScale([], voice)}
+        width={120}
+        spelling={spellingIn(row.key)}
+      />
     </View>
   );
 }

@@ -21,7 +21,12 @@ test("a choice becomes a decision that the contract accepts", () => {
 
 test("a new choice takes the place of the one before", () => {
   const before = decide(choice, null, () => id, now);
-  const after = decide({ ...choice, tonic: "Bb", shift: -4, way: null }, before, () => "never", new Date("2026-03-06T19:30:00Z"));
+  const after = decide(
+    { ...choice, tonic: "Bb", shift: -4, way: null },
+    before,
+    () => "never",
+    new Date("2026-03-06T19:30:00Z"),
+  );
   expect(after).toMatchObject({ id, tonic: "Bb", shift: -4, way: null, decidedAt: "2026-03-06T19:30:00.000Z" });
 });
 

@@ -11,7 +11,10 @@ export const decisionQueries = {
 export function decisionFor(decisions: readonly Decision[], songId: string): Decision | null {
   return decisions
     .filter((decision) => decision.songId === songId)
-    .reduce<Decision | null>((latest, each) => (latest === null || each.decidedAt > latest.decidedAt ? each : latest), null);
+    .reduce<Decision | null>(
+      (latest, each) => (latest === null || each.decidedAt > latest.decidedAt ? each : latest),
+      null,
+    );
 }
 
 export function useSaveDecision() {

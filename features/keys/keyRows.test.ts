@@ -1,7 +1,12 @@
 import type { KeyScore } from "@/shared/keys/keyScore";
 import { commonScale, keyRows, rowOf, sortedRows, spellingIn, wholeVoice } from "./keyRows";
 
-const score = (shift: number, points: number, reserves: { upper: number; lower: number }, beyond = false): KeyScore => ({
+const score = (
+  shift: number,
+  points: number,
+  reserves: { upper: number; lower: number },
+  beyond = false,
+): KeyScore => ({
   tonic: "C",
   octave: 0,
   shift,

@@ -44,7 +44,11 @@ export const keyOrders: readonly { value: KeyOrder; label: string }[] = [
 ];
 
 /** Scores as rows, best first. `chordsIn` gives the song's chords in a key. */
-export function keyRows(scores: readonly KeyScore[], written: KeyName, chordsIn: (key: KeyName) => readonly string[]): KeyRow[] {
+export function keyRows(
+  scores: readonly KeyScore[],
+  written: KeyName,
+  chordsIn: (key: KeyName) => readonly string[],
+): KeyRow[] {
   return scores.map((score) => {
     const key = movedKey(written, score.shift);
     const sign = glyphs(keySign(key));
@@ -101,7 +105,10 @@ export function commonScale(rows: readonly KeyRow[], voice: SingingVoice): { low
 
 /** The voice on the semitones that people read and keys are judged by, so that pictures agree with scores. */
 export function wholeVoice(voice: SingingVoice): SingingVoice {
-  const band = ({ lowMidi, highMidi }: SingingVoice["range"]) => ({ lowMidi: Math.round(lowMidi), highMidi: Math.round(highMidi) });
+  const band = ({ lowMidi, highMidi }: SingingVoice["range"]) => ({
+    lowMidi: Math.round(lowMidi),
+    highMidi: Math.round(highMidi),
+  });
   return { range: band(voice.range), comfort: band(voice.comfort) };
 }
 

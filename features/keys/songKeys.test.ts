@@ -14,7 +14,16 @@ const song: Song = {
   createdAt: "2026-03-05T19:00:00.000Z",
 };
 const singing = { range: { lowMidi: 51, highMidi: 74 }, comfort: { lowMidi: 55, highMidi: 70 } };
-const choice = { songId: song.id, tonic: "D", shift: -5, score: null, reason: "Mine.", voiceId: null, instrument: null, way: null };
+const choice = {
+  songId: song.id,
+  tonic: "D",
+  shift: -5,
+  score: null,
+  reason: "Mine.",
+  voiceId: null,
+  instrument: null,
+  way: null,
+};
 const decision = decide(choice, null, () => song.id, new Date(0));
 
 test("all twelve keys come with their chords, the coarse ones saying so", () => {

@@ -64,12 +64,18 @@ export function keyInHand(song: Song, rows: readonly KeyRow[] | null, decision: 
 }
 
 /** The key that an address asks for; the key in hand where it asks for none, or for one that cannot be read. */
-export function askedKey(song: Song, inHand: KeyInHand | null, tonic: string | undefined, shift: string | undefined): { key: KeyName; shift: number } {
+export function askedKey(
+  song: Song,
+  inHand: KeyInHand | null,
+  tonic: string | undefined,
+  shift: string | undefined,
+): { key: KeyName; shift: number } {
   const written = writtenKeyOf(song) ?? { tonic: "C", mode: "major" };
   const semitones = shift !== undefined && /^-?\d{1,2}$/.test(shift) ? Number(shift) : null;
   if (semitones !== null && Math.abs(semitones) <= 48) {
     const moved = movedKey(written, semitones);
-    const named = tonic !== undefined && /^[A-G][#b]?$/.test(tonic) && tonicPitchClass(tonic) === tonicPitchClass(moved.tonic);
+    const named =
+      tonic !== undefined && /^[A-G][#b]?$/.test(tonic) && tonicPitchClass(tonic) === tonicPitchClass(moved.tonic);
     return { key: named ? { ...moved, tonic } : moved, shift: semitones };
   }
   return inHand ? { key: inHand.key, shift: inHand.shift } : { key: written, shift: 0 };

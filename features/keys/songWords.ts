@@ -6,15 +6,22 @@ import { spellingIn } from "./keyRows";
 import { writtenKeyOf } from "./songKeys";
 
 /** The line under a song's title: "Written in G, tune D4 to E5 · your voice Evenings, E♭3 to D5 · box guitar, A D F♯" */
-export function songWords(song: Song, voiceName: string | null, voice: SingingVoice | null, instrument: string): string {
+export function songWords(
+  song: Song,
+  voiceName: string | null,
+  voice: SingingVoice | null,
+  instrument: string,
+): string {
   const written = writtenKeyOf(song);
   const spelling = written ? spellingIn(written) : "sharps";
-  const ends = (low: number, high: number, kind: "sharps" | "flats") => glyphs(`${noteName(low, kind)} to ${noteName(high, kind)}`);
+  const ends = (low: number, high: number, kind: "sharps" | "flats") =>
+    glyphs(`${noteName(low, kind)} to ${noteName(high, kind)}`);
   const key = written ? `Written in ${glyphs(keySign(written))}` : "No key yet";
   const tune = song.tune && spanOf(song.tune);
   return [
     tune ? `${key}, tune ${ends(tune.low, tune.high, spelling)}` : key,
-    voice && `your voice ${voiceName === null ? "" : `${voiceName}, `}${ends(voice.range.lowMidi, voice.range.highMidi, "flats")}`,
+    voice &&
+      `your voice ${voiceName === null ? "" : `${voiceName}, `}${ends(voice.range.lowMidi, voice.range.highMidi, "flats")}`,
     `strings ${instrument}`,
   ]
     .filter((part) => part !== null)
@@ -24,5 +31,8 @@ export function songWords(song: Song, voiceName: string | null, voice: SingingVo
 function spanOf(tune: NonNullable<Song["tune"]>): { low: number; high: number } {
   if (tune.kind === "span") return { low: tune.lowMidi, high: tune.highMidi };
   const midis = tune.notes.map((note) => note.midi);
-  return { low: midis.reduce((a, b) => Math.min(a, b), Infinity), high: midis.reduce((a, b) => Math.max(a, b), -Infinity) };
+  return {
+    low: midis.reduce((a, b) => Math.min(a, b), Infinity),
+    high: midis.reduce((a, b) => Math.max(a, b), -Infinity),
+  };
 }

@@ -42,18 +42,40 @@ export function EditScreen({ song, onSaved }: EditScreenProps) {
       key={form.version}
       draft={form.draft}
       songId={id}
-      origin={() => (song ? { id: song.id, demo: song.demo, createdAt: song.createdAt } : { id: form.newId, demo: null, createdAt: new Date().toISOString() })}
+      origin={() =>
+        song
+          ? { id: song.id, demo: song.demo, createdAt: song.createdAt }
+          : { id: form.newId, demo: null, createdAt: new Date().toISOString() }
+      }
       problem={save.error}
       onSave={keep}
       frame={(fields, submit) => (
         <Screen
           title={song ? "Edit the song" : "Add a song"}
-          crumb={song ? { label: song.title, href: { pathname: "/songs/[id]", params: { id: song.id } } } : { label: "Songs", href: "/songs" }}
+          crumb={
+            song
+              ? { label: song.title, href: { pathname: "/songs/[id]", params: { id: song.id } } }
+              : { label: "Songs", href: "/songs" }
+          }
           wide
-          footer={<Button small={!phone} label="Save the song" busy={save.isPending} onPress={submit} testID="save-song" />}
+          footer={
+            <Button small={!phone} label="Save the song" busy={save.isPending} onPress={submit} testID="save-song" />
+          }
         >
           {form.restored && (
-            <Notice kind="good" testID="draft-restored" title="Your draft is back" action={<Button kind="text" small label={song ? "Go back to what is saved" : "Start afresh"} onPress={discard} />}>
+            <Notice
+              kind="good"
+              testID="draft-restored"
+              title="Your draft is back"
+              action={
+                <Button
+                  kind="text"
+                  small
+                  label={song ? "Go back to what is saved" : "Start afresh"}
+                  onPress={discard}
+                />
+              }
+            >
               What you typed and did not save stands here again.
             </Notice>
           )}

@@ -32,7 +32,11 @@ export function KeyChooser({ finding, chosen, onChoose }: KeyChooserProps) {
         {key === null ? "Not known yet" : glyphs(keyWords(key))}
       </Text>
       <Text variant="small" tone="soft">
-        {byHand && finding ? `Chosen by you. The chart looks like ${glyphs(keyWords(finding.key))}.` : byHand ? "Chosen by you." : foundWords(finding)}
+        {byHand && finding
+          ? `Chosen by you. The chart looks like ${glyphs(keyWords(finding.key))}.`
+          : byHand
+            ? "Chosen by you."
+            : foundWords(finding)}
       </Text>
       {!byHand && finding && finding.reasons.length > 0 && (
         <View role="list" style={{ gap: 2 }}>
@@ -44,11 +48,26 @@ export function KeyChooser({ finding, chosen, onChoose }: KeyChooserProps) {
         </View>
       )}
       <View style={{ flexDirection: "row", flexWrap: "wrap", columnGap: 8, marginLeft: -8 }}>
-        {byHand && finding && <Button kind="text" small label={`Use ${glyphs(keyWords(finding.key))}`} onPress={() => onChoose(null)} />}
-        {!byHand && finding && (
-          <Button kind="text" small label={`It is ${glyphs(keyWords(finding.runnerUp))}`} onPress={() => onChoose(finding.runnerUp)} testID="runner-up" />
+        {byHand && finding && (
+          <Button kind="text" small label={`Use ${glyphs(keyWords(finding.key))}`} onPress={() => onChoose(null)} />
         )}
-        <Button kind="text" small label={open ? "Close the list" : "Another key"} expanded={open} onPress={() => setOpen(!open)} testID="another-key" />
+        {!byHand && finding && (
+          <Button
+            kind="text"
+            small
+            label={`It is ${glyphs(keyWords(finding.runnerUp))}`}
+            onPress={() => onChoose(finding.runnerUp)}
+            testID="runner-up"
+          />
+        )}
+        <Button
+          kind="text"
+          small
+          label={open ? "Close the list" : "Another key"}
+          expanded={open}
+          onPress={() => setOpen(!open)}
+          testID="another-key"
+        />
       </View>
       {open && <KeySelects value={key ?? { tonic: "C", mode: "major" }} onChoose={onChoose} />}
     </Card>

@@ -59,9 +59,21 @@ export function MelodyFileField({ melody, error, onChange }: MelodyFileFieldProp
           if (given) void read(given);
         }}
       />
-      <Button kind="secondary" small icon="file" label={melody ? "Choose another file" : "Choose a file"} busy={reading} onPress={() => input.current?.click()} style={{ alignSelf: "flex-start" }} />
+      <Button
+        kind="secondary"
+        small
+        icon="file"
+        label={melody ? "Choose another file" : "Choose a file"}
+        busy={reading}
+        onPress={() => input.current?.click()}
+        style={{ alignSelf: "flex-start" }}
+      />
       <LiveText variant="small" tone="soft">
-        {reading ? "Reading the melody." : melody ? melodyWords(melody) : "ABC, MIDI or MusicXML, at most 5 MB. It stays on this device until you save."}
+        {reading
+          ? "Reading the melody."
+          : melody
+            ? melodyWords(melody)
+            : "ABC, MIDI or MusicXML, at most 5 MB. It stays on this device until you save."}
       </LiveText>
       {file && file.voices.length > 1 && (
         <Select

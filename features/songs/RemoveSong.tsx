@@ -14,7 +14,17 @@ export interface RemoveSongProps {
 /** Deletes only after it was asked twice. */
 export function RemoveSong({ title, onRemove, busy, error }: RemoveSongProps) {
   const [asked, setAsked] = useState(false);
-  if (!asked) return <Button kind="text" small icon="trash" label="Delete the song" onPress={() => setAsked(true)} testID="remove-song" />;
+  if (!asked)
+    return (
+      <Button
+        kind="text"
+        small
+        icon="trash"
+        label="Delete the song"
+        onPress={() => setAsked(true)}
+        testID="remove-song"
+      />
+    );
   return (
     <Notice kind="caution" title={`Delete “${title}”?`} testID="remove-asked">
       <Text variant="small">Its chart, its melody and your key for it go too. This cannot be undone.</Text>

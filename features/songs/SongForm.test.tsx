@@ -4,7 +4,11 @@ import { draftStore } from "./draftStore";
 import { emptyDraft, type SongDraft } from "./songDraft";
 import { SongForm } from "./SongForm";
 
-const origin = () => ({ id: "7f0b6f0e-6a51-4a8e-9a53-0a3d8f6f3f01", demo: null, createdAt: "2026-03-05T19:00:00.000Z" });
+const origin = () => ({
+  id: "7f0b6f0e-6a51-4a8e-9a53-0a3d8f6f3f01",
+  demo: null,
+  createdAt: "2026-03-05T19:00:00.000Z",
+});
 const chart = "G       C\nLow tide and still\nD       G\nthe gulls go by";
 
 function open(draft: Partial<SongDraft> = {}, problem: Error | null = null) {
@@ -32,7 +36,8 @@ function open(draft: Partial<SongDraft> = {}, problem: Error | null = null) {
 
 /** The file readers are fetched with the first file, which takes its time where nothing is compiled yet. */
 const readerLoads = { timeout: 20_000 };
-const type = (label: RegExp | string, text: string) => fireEvent.change(screen.getByLabelText(label), { target: { value: text } });
+const type = (label: RegExp | string, text: string) =>
+  fireEvent.change(screen.getByLabelText(label), { target: { value: text } });
 const save = () => fireEvent.click(screen.getByText("Save the song"));
 
 afterEach(() => localStorage.clear());
@@ -45,7 +50,12 @@ test("a typed chart is read as one types: key found, preview shown, song saved",
   expect(within(screen.getByTestId("preview")).getByTestId("chart").textContent).toContain("tide");
   save();
   await waitFor(() => expect(saved).toHaveLength(1));
-  expect(saved[0]).toMatchObject({ title: "Slack Water", chart, writtenKey: { tonic: "G", mode: "major" }, tune: null });
+  expect(saved[0]).toMatchObject({
+    title: "Slack Water",
+    chart,
+    writtenKey: { tonic: "G", mode: "major" },
+    tune: null,
+  });
 });
 
 test("what is missing is said at its field, and nothing typed is lost", async () => {

@@ -33,7 +33,9 @@ export interface SongFormProps {
 
 /** Title, chart, key and melody of a song. Every letter is kept on this device until the song is saved. */
 export function SongForm({ draft, songId, origin, problem, onSave, frame }: SongFormProps) {
-  const { control, handleSubmit, setValue, setError, clearErrors, formState } = useForm<SongDraft>({ defaultValues: draft });
+  const { control, handleSubmit, setValue, setError, clearErrors, formState } = useForm<SongDraft>({
+    defaultValues: draft,
+  });
   const typed = { ...draft, ...useWatch({ control }) } as SongDraft;
   const chartText = useDeferredValue(typed.chart);
   const chart = useMemo(() => parseChart(chartText), [chartText]);
@@ -46,10 +48,13 @@ export function SongForm({ draft, songId, origin, problem, onSave, frame }: Song
     if (kept !== untouched) draftStore.save(songId, JSON.parse(kept) as SongDraft);
   }, [kept, untouched, songId]);
 
-  const errors: DraftErrors = Object.fromEntries(Object.entries(formState.errors).map(([name, error]) => [name, error?.message]));
+  const errors: DraftErrors = Object.fromEntries(
+    Object.entries(formState.errors).map(([name, error]) => [name, error?.message]),
+  );
   const change = (changes: Partial<SongDraft>) => {
     clearErrors(Object.keys(changes) as (keyof SongDraft)[]);
-    for (const [name, value] of Object.entries(changes)) setValue(name as keyof SongDraft, value as never, { shouldDirty: true });
+    for (const [name, value] of Object.entries(changes))
+      setValue(name as keyof SongDraft, value as never, { shouldDirty: true });
   };
   const submit = handleSubmit((values) => {
     // The deferred chart may lag behind the last letter typed.
@@ -59,7 +64,11 @@ export function SongForm({ draft, songId, origin, problem, onSave, frame }: Song
     if (wrong.length === 0) onSave(songFromDraft(values, found, origin()));
   });
 
-  const text = (name: "title" | "chart" | "beatsPerBar" | "tempo", label: string, more: Partial<React.ComponentProps<typeof Field>>) => (
+  const text = (
+    name: "title" | "chart" | "beatsPerBar" | "tempo",
+    label: string,
+    more: Partial<React.ComponentProps<typeof Field>>,
+  ) => (
     <Controller
       control={control}
       name={name}
@@ -83,8 +92,17 @@ export function SongForm({ draft, songId, origin, problem, onSave, frame }: Song
   const wrong = Object.values(errors).filter((message) => message !== undefined);
   const form = (
     <Form label="Song" onSubmit={() => void submit()} gap={20}>
-      {problem && <Notice kind="error" title="The song is not saved yet">{`${problem.message} Everything you typed is still here.`}</Notice>}
-      {wrong.length > 0 && <Notice kind="error" title="Something is missing">{wrong.join(" ")}</Notice>}
+      {problem && (
+        <Notice
+          kind="error"
+          title="The song is not saved yet"
+        >{`${problem.message} Everything you typed is still here.`}</Notice>
+      )}
+      {wrong.length > 0 && (
+        <Notice kind="error" title="Something is missing">
+          {wrong.join(" ")}
+        </Notice>
+      )}
       <View style={{ flexDirection: wide ? "row" : "column", gap: wide ? 32 : 20, alignItems: "stretch" }}>
         <View style={wide ? column : { gap: 20 }}>
           {text("title", "Title", { autoComplete: "off" })}
@@ -97,14 +115,34 @@ export function SongForm({ draft, songId, origin, problem, onSave, frame }: Song
           <UnreadSigns signs={chart.unread} />
           {!wide && <Preview chart={chart} />}
           <View style={{ flexDirection: "row", gap: 12 }}>
-            <View style={{ flexGrow: 1, flexBasis: 0, minWidth: 0 }}>{text("beatsPerBar", "Beats in a bar", { inputMode: "numeric" })}</View>
-            <View style={{ flexGrow: 1, flexBasis: 0, minWidth: 0 }}>{text("tempo", "Beats a minute", { inputMode: "numeric", hint: "May stay empty" })}</View>
+            <View style={{ flexGrow: 1, flexBasis: 0, minWidth: 0 }}>
+              {text("beatsPerBar", "Beats in a bar", { inputMode: "numeric" })}
+            </View>
+            <View style={{ flexGrow: 1, flexBasis: 0, minWidth: 0 }}>
+              {text("tempo", "Beats a minute", { inputMode: "numeric", hint: "May stay empty" })}
+            </View>
           </View>
-          {wide && <TuneFields draft={typed} errors={errors} writtenKey={typed.key ?? finding?.key ?? null} onChange={change} />}
+          {wide && (
+            <TuneFields
+              draft={typed}
+              errors={errors}
+              writtenKey={typed.key ?? finding?.key ?? null}
+              onChange={change}
+            />
+          )}
         </View>
         <View style={wide ? column : { gap: 20 }}>
           <KeyChooser finding={finding} chosen={typed.key} onChoose={(key) => change({ key })} />
-          {wide ? <Preview chart={chart} /> : <TuneFields draft={typed} errors={errors} writtenKey={typed.key ?? finding?.key ?? null} onChange={change} />}
+          {wide ? (
+            <Preview chart={chart} />
+          ) : (
+            <TuneFields
+              draft={typed}
+              errors={errors}
+              writtenKey={typed.key ?? finding?.key ?? null}
+              onChange={change}
+            />
+          )}
         </View>
       </View>
     </Form>

@@ -19,7 +19,7 @@ import { RemoveSong } from "./RemoveSong";
 import { beatWords, headWords } from "./songFacts";
 
 /** The key that the page shows the chart in, besides the written one. */
-export interface TargetKey {
+interface TargetKey {
   key: KeyName;
   shift: number;
   /** decided by the singer; else the best for the voice */
@@ -56,10 +56,30 @@ export function SongScreen({ song, target, card, decided, keys, ways, use, onRem
   const to = moved && !asWritten ? target.key : null;
   const params = { id: song.id };
   const targetSign = target && glyphs(keySign(target.key));
-  const waysHref = { pathname: "/songs/[id]/ways" as const, params: target ? { ...params, key: target.key.tonic, shift: String(target.shift) } : params };
+  const waysHref = {
+    pathname: "/songs/[id]/ways" as const,
+    params: target ? { ...params, key: target.key.tonic, shift: String(target.shift) } : params,
+  };
   const tools = (
-    <View style={{ flexDirection: "row", flexWrap: "wrap", columnGap: 8, marginTop: 24, marginLeft: -8, alignItems: "flex-start" }}>
-      {!wide && <LinkButton kind="text" small icon="edit" label="Edit the song" href={{ pathname: "/songs/[id]/edit", params }} />}
+    <View
+      style={{
+        flexDirection: "row",
+        flexWrap: "wrap",
+        columnGap: 8,
+        marginTop: 24,
+        marginLeft: -8,
+        alignItems: "flex-start",
+      }}
+    >
+      {!wide && (
+        <LinkButton
+          kind="text"
+          small
+          icon="edit"
+          label="Edit the song"
+          href={{ pathname: "/songs/[id]/edit", params }}
+        />
+      )}
       <RemoveSong title={song.title} onRemove={onRemove} busy={removal.isPending} error={removal.error} />
     </View>
   );
@@ -78,21 +98,47 @@ export function SongScreen({ song, target, card, decided, keys, ways, use, onRem
           })}
         >
           <View style={[{ paddingTop: 14 }, webStyle(three ? {} : { gridRow: "1 / span 2" })]}>
-            <View style={{ flexDirection: "row", flexWrap: "wrap", justifyContent: "space-between", alignItems: "baseline", columnGap: 12, minHeight: 28, marginBottom: 6 }}>
+            <View
+              style={{
+                flexDirection: "row",
+                flexWrap: "wrap",
+                justifyContent: "space-between",
+                alignItems: "baseline",
+                columnGap: 12,
+                minHeight: 28,
+                marginBottom: 6,
+              }}
+            >
               <Heading level={2}>{chartHeading(song, to)}</Heading>
               {moved && (
                 <View style={{ flexDirection: "row", alignItems: "center", gap: 4 }}>
                   <Text variant="small" tone="soft" style={{ fontSize: 13 }}>
-                    {asWritten ? `your key is ${targetSign}` : `moved ${shortMove(target.shift)} from ${glyphs(keySign(song.writtenKey ?? target.key))}`}
+                    {asWritten
+                      ? `your key is ${targetSign}`
+                      : `moved ${shortMove(target.shift)} from ${glyphs(keySign(song.writtenKey ?? target.key))}`}
                   </Text>
-                  <Button kind="text" small label={asWritten ? `Show in ${targetSign}` : "Show as written"} onPress={() => setAsWritten(!asWritten)} testID="toggle-key" style={{ marginVertical: -12 }} />
+                  <Button
+                    kind="text"
+                    small
+                    label={asWritten ? `Show in ${targetSign}` : "Show as written"}
+                    onPress={() => setAsWritten(!asWritten)}
+                    testID="toggle-key"
+                    style={{ marginVertical: -12 }}
+                  />
                 </View>
               )}
             </View>
             <MovedChart song={song} to={to} size={17} level={3} />
             {tools}
           </View>
-          <View style={[{ paddingTop: 14, paddingLeft: 24, marginLeft: -24, borderLeftWidth: 1, borderColor: colors.line }, webStyle({ alignSelf: "stretch" })]}>{keys}</View>
+          <View
+            style={[
+              { paddingTop: 14, paddingLeft: 24, marginLeft: -24, borderLeftWidth: 1, borderColor: colors.line },
+              webStyle({ alignSelf: "stretch" }),
+            ]}
+          >
+            {keys}
+          </View>
           <View style={three ? { paddingTop: 14 } : { paddingTop: 24 }}>{ways}</View>
         </View>
       </Screen>
@@ -104,15 +150,34 @@ export function SongScreen({ song, target, card, decided, keys, ways, use, onRem
       large
       footer={
         <View style={{ flexDirection: "row", gap: 10 }}>
-          <LinkButton kind="secondary" label="Keys" href={{ pathname: "/songs/[id]/keys", params }} style={{ flexGrow: 1 }} testID="to-keys" />
-          <LinkButton label={targetSign === null ? "Ways to play it" : `Ways to play it in ${targetSign}`} href={waysHref} style={{ flexGrow: 3, flexShrink: 1 }} testID="to-ways" />
+          <LinkButton
+            kind="secondary"
+            label="Keys"
+            href={{ pathname: "/songs/[id]/keys", params }}
+            style={{ flexGrow: 1 }}
+            testID="to-keys"
+          />
+          <LinkButton
+            label={targetSign === null ? "Ways to play it" : `Ways to play it in ${targetSign}`}
+            href={waysHref}
+            style={{ flexGrow: 3, flexShrink: 1 }}
+            testID="to-ways"
+          />
         </View>
       }
     >
       <View style={{ gap: 14 }}>
         {card}
         {decided}
-        <View style={{ flexDirection: "row", flexWrap: "wrap", alignItems: "center", justifyContent: "space-between", gap: 8 }}>
+        <View
+          style={{
+            flexDirection: "row",
+            flexWrap: "wrap",
+            alignItems: "center",
+            justifyContent: "space-between",
+            gap: 8,
+          }}
+        >
           {moved && song.writtenKey && (
             <Segmented
               label="Which key the chart is shown in"
@@ -141,7 +206,13 @@ export function SongScreen({ song, target, card, decided, keys, ways, use, onRem
 function WideActions({ id, use }: { id: string; use: ReactNode }) {
   return (
     <>
-      <LinkButton kind="secondary" small label="Edit" href={{ pathname: "/songs/[id]/edit", params: { id } }} testID="edit-song" />
+      <LinkButton
+        kind="secondary"
+        small
+        label="Edit"
+        href={{ pathname: "/songs/[id]/edit", params: { id } }}
+        testID="edit-song"
+      />
       {use}
     </>
   );

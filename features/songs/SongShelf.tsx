@@ -40,8 +40,16 @@ export function SongShelf({ songs, myKey }: SongShelfProps) {
   const found = songsNamed(songs, search);
   return (
     <View style={{ gap: 16 }}>
-      <Field label="Search your songs" value={search} onChangeText={setSearch} inputMode="search" testID="song-search" />
-      <LiveText hidden>{search.trim() === "" ? "" : `${found.length} ${found.length === 1 ? "song" : "songs"} found`}</LiveText>
+      <Field
+        label="Search your songs"
+        value={search}
+        onChangeText={setSearch}
+        inputMode="search"
+        testID="song-search"
+      />
+      <LiveText hidden>
+        {search.trim() === "" ? "" : `${found.length} ${found.length === 1 ? "song" : "songs"} found`}
+      </LiveText>
       {found.length === 0 ? (
         <Text tone="soft">{`No title and no line holds “${search.trim()}”. Try a word from the chorus.`}</Text>
       ) : (
@@ -63,14 +71,32 @@ function SongRow({ song, mine }: { song: Song; mine: ShelfKey | null }) {
     <Link
       href={{ pathname: "/songs/[id]", params: { id: song.id } }}
       testID={`song-${song.id}`}
-      style={[{ flexDirection: "row", alignItems: "center", gap: 12, minHeight: 72, paddingVertical: 12 } as TextStyle, webStyle({ display: "flex" })]}
+      style={[
+        { flexDirection: "row", alignItems: "center", gap: 12, minHeight: 72, paddingVertical: 12 } as TextStyle,
+        webStyle({ display: "flex" }),
+      ]}
     >
       <View style={{ width: 44, flexShrink: 0 }} aria-hidden>
-        <Text tone={mine ? "ink" : "soft"} style={{ fontFamily: fonts.display, fontWeight: "700", fontSize: 26, lineHeight: 30 }}>
+        <Text
+          tone={mine ? "ink" : "soft"}
+          style={{ fontFamily: fonts.display, fontWeight: "700", fontSize: 26, lineHeight: 30 }}
+        >
           {mine?.sign ?? facts.sign ?? "–"}
         </Text>
       </View>
-      <View style={{ flexGrow: 1, flexShrink: 1, flexBasis: 0, minWidth: 0, flexDirection: "row", flexWrap: "wrap", alignItems: "center", columnGap: 24, rowGap: 6 }}>
+      <View
+        style={{
+          flexGrow: 1,
+          flexShrink: 1,
+          flexBasis: 0,
+          minWidth: 0,
+          flexDirection: "row",
+          flexWrap: "wrap",
+          alignItems: "center",
+          columnGap: 24,
+          rowGap: 6,
+        }}
+      >
         <View style={{ flexGrow: 1, flexShrink: 1, flexBasis: 200, minWidth: 0 }}>
           <Text variant="strong">{song.title}</Text>
           <Text variant="small" tone="soft">

@@ -28,7 +28,16 @@ export function SongState({ query, title, children }: SongStateProps) {
           action={<LinkButton href="/songs" label="To your songs" small />}
         />
       ) : (
-        <QueryState query={query} title="The song could not be opened" skeleton={<Skeleton bars={[{ height: 72 }, { height: 44, width: 220 }, { width: "70%" }, { width: "82%" }, { width: "76%" }]} words="Opening the song" />}>
+        <QueryState
+          query={query}
+          title="The song could not be opened"
+          skeleton={
+            <Skeleton
+              bars={[{ height: 72 }, { height: 44, width: 220 }, { width: "70%" }, { width: "82%" }, { width: "76%" }]}
+              words="Opening the song"
+            />
+          }
+        >
           {() => null}
         </QueryState>
       )}

@@ -20,7 +20,11 @@ export interface TuneFieldsProps {
 
 const kinds = [
   { value: "none", label: "Not yet", hint: "You can give it later; keys are found once it is there." },
-  { value: "span", label: "By hand", hint: "Lowest note, highest note and home note. Coarser, but enough for a first answer." },
+  {
+    value: "span",
+    label: "By hand",
+    hint: "Lowest note, highest note and home note. Coarser, but enough for a first answer.",
+  },
   { value: "melody", label: "From a file", hint: "ABC, MIDI or MusicXML." },
 ] as const;
 
@@ -31,14 +35,34 @@ export function TuneFields({ draft, errors, writtenKey, onChange }: TuneFieldsPr
       <Heading level={2} size={16}>
         Melody
       </Heading>
-      <Choice label="Where the melody comes from" hideLabel options={kinds} value={draft.tune} onChange={(tune) => onChange({ tune })} />
+      <Choice
+        label="Where the melody comes from"
+        hideLabel
+        options={kinds}
+        value={draft.tune}
+        onChange={(tune) => onChange({ tune })}
+      />
       {draft.tune === "span" && (
         <View style={{ flexDirection: "row", flexWrap: "wrap", gap: 12 }}>
           <View style={{ flexGrow: 1, flexBasis: 120 }}>
-            <Field label="Lowest note" value={draft.low} onChangeText={(low) => onChange({ low })} error={errors.low} hint="Such as D4" testID="tune-low" />
+            <Field
+              label="Lowest note"
+              value={draft.low}
+              onChangeText={(low) => onChange({ low })}
+              error={errors.low}
+              hint="Such as D4"
+              testID="tune-low"
+            />
           </View>
           <View style={{ flexGrow: 1, flexBasis: 120 }}>
-            <Field label="Highest note" value={draft.high} onChangeText={(high) => onChange({ high })} error={errors.high} hint="Such as E5" testID="tune-high" />
+            <Field
+              label="Highest note"
+              value={draft.high}
+              onChangeText={(high) => onChange({ high })}
+              error={errors.high}
+              hint="Such as E5"
+              testID="tune-high"
+            />
           </View>
         </View>
       )}

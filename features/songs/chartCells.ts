@@ -46,8 +46,10 @@ function breaks(line: string, chords: readonly PlacedChord[]): number[] {
   const stops: number[] = [];
   for (let column = 1; column < line.length; column++) {
     const wordStarts = line[column] !== " " && line[column - 1] === " ";
-    const chordOverBlanks = line[column] === " " && line[column - 1] === " " && chords.some((chord) => chord.column === column);
-    const inLongGap = column >= gap && line.slice(column - gap, column + 1).trim() === "" && column - (stops.at(-1) ?? 0) >= gap;
+    const chordOverBlanks =
+      line[column] === " " && line[column - 1] === " " && chords.some((chord) => chord.column === column);
+    const inLongGap =
+      column >= gap && line.slice(column - gap, column + 1).trim() === "" && column - (stops.at(-1) ?? 0) >= gap;
     const insideChord = chords.some((chord) => chord.column < column && chord.column + chord.text.length >= column);
     if ((wordStarts || chordOverBlanks || inLongGap) && !insideChord) stops.push(column);
   }

@@ -3,7 +3,6 @@ import { session } from "@/features/api/session";
 import { shelf } from "@/features/api/shelf";
 import type { Song } from "@/shared/contract/song";
 
-
 const mark = "larkspan.demo-songs";
 
 /** Which address each demonstration song got on this device, and whether they were put there. */

@@ -4,7 +4,25 @@ import { glyphs } from "@/shared/music/pitch";
 import type { KeyFinding } from "@/shared/songs/findKey";
 
 /** Home notes to choose from, in the order of a scale. */
-export const tonics: readonly string[] = ["C", "C#", "Db", "D", "D#", "Eb", "E", "F", "F#", "Gb", "G", "G#", "Ab", "A", "A#", "Bb", "B"];
+export const tonics: readonly string[] = [
+  "C",
+  "C#",
+  "Db",
+  "D",
+  "D#",
+  "Eb",
+  "E",
+  "F",
+  "F#",
+  "Gb",
+  "G",
+  "G#",
+  "Ab",
+  "A",
+  "A#",
+  "Bb",
+  "B",
+];
 
 export const modes: readonly Mode[] = ["major", "minor", "dorian", "mixolydian", "lydian", "phrygian", "locrian"];
 

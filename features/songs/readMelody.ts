@@ -6,12 +6,19 @@ export type MelodyReading = { ok: true; voices: MelodyVoice[]; proposed: number 
 
 /** Reads a melody file of at most 5 MB. The reader is fetched when the first file is chosen. */
 export async function readMelody(file: File): Promise<MelodyReading> {
-  if (file.size > largest) return { ok: false, reason: "This file is larger than 5 MB. A melody is seldom larger than a few kB; choose another file." };
+  if (file.size > largest)
+    return {
+      ok: false,
+      reason: "This file is larger than 5 MB. A melody is seldom larger than a few kB; choose another file.",
+    };
   if (file.size === 0) return { ok: false, reason: "This file is empty. Choose another one." };
   try {
     const [{ readMelodyFile }, bytes] = await Promise.all([import("@/shared/songs/melodyFile"), file.arrayBuffer()]);
     return readMelodyFile(file.name, new Uint8Array(bytes));
   } catch {
-    return { ok: false, reason: "The file could not be opened here. What you typed is safe; check your connection and try again." };
+    return {
+      ok: false,
+      reason: "The file could not be opened here. What you typed is safe; check your connection and try again.",
+    };
   }
 }

@@ -62,7 +62,7 @@ export function draftOf(song: Song): SongDraft {
 }
 
 /** Which accidentals go with a tonic. */
-export function spellingOf(tonic: string): "sharps" | "flats" {
+function spellingOf(tonic: string): "sharps" | "flats" {
   return tonic.includes("b") || tonic === "F" ? "flats" : "sharps";
 }
 
@@ -78,12 +78,16 @@ export function draftErrors(draft: SongDraft, found: KeyName | null): DraftError
   if (draft.title.trim().length > 200) errors.title = "A title may have at most 200 characters.";
   if (draft.chart.length > 100_000) errors.chart = "A chart may have at most 100,000 characters.";
   const beats = readNumber(draft.beatsPerBar);
-  if (beats !== null && !(Number.isInteger(beats) && beats >= 1 && beats <= 16)) errors.beatsPerBar = "Give 1 to 16 beats, or leave it empty.";
+  if (beats !== null && !(Number.isInteger(beats) && beats >= 1 && beats <= 16))
+    errors.beatsPerBar = "Give 1 to 16 beats, or leave it empty.";
   const tempo = readNumber(draft.tempo);
-  if (tempo !== null && !(tempo >= 20 && tempo <= 400)) errors.tempo = "Give 20 to 400 beats a minute, or leave it empty.";
+  if (tempo !== null && !(tempo >= 20 && tempo <= 400))
+    errors.tempo = "Give 20 to 400 beats a minute, or leave it empty.";
   if (draft.tune === "span") checkSpan(draft, errors);
-  if (draft.tune === "melody" && draft.melody === null) errors.melody = "Choose a melody file, or set the lowest and highest note by hand.";
-  if (draft.tune !== "none" && draft.home === "" && (draft.key ?? found) === null) errors.home = "Choose the home note of the tune.";
+  if (draft.tune === "melody" && draft.melody === null)
+    errors.melody = "Choose a melody file, or set the lowest and highest note by hand.";
+  if (draft.tune !== "none" && draft.home === "" && (draft.key ?? found) === null)
+    errors.home = "Choose the home note of the tune.";
   return errors;
 }
 
@@ -120,8 +124,17 @@ function tuneFromDraft(draft: SongDraft, key: KeyName | null): Song["tune"] {
   const home = key?.tonic ?? given;
   const move = moveToHome(given, home);
   if (draft.tune === "melody")
-    return { kind: "melody", home, notes: (draft.melody?.notes ?? []).map((note) => ({ ...note, midi: note.midi + move })) };
-  return { kind: "span", home, lowMidi: (readNote(draft.low) ?? 0) + move, highMidi: (readNote(draft.high) ?? 0) + move };
+    return {
+      kind: "melody",
+      home,
+      notes: (draft.melody?.notes ?? []).map((note) => ({ ...note, midi: note.midi + move })),
+    };
+  return {
+    kind: "span",
+    home,
+    lowMidi: (readNote(draft.low) ?? 0) + move,
+    highMidi: (readNote(draft.high) ?? 0) + move,
+  };
 }
 
 function readNote(text: string): number | null {

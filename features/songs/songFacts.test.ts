@@ -27,7 +27,9 @@ test.each([
 
 test("a song's facts", () => {
   expect(songFacts(shelf[0]!)).toEqual({ sign: "B♭m", line: "Written in B♭m, no melody yet." });
-  expect(songFacts(song("x", "", { writtenKey: null, demo: "ferry" })).line).toBe("No key yet, a song to try Larkspan with, no melody yet.");
+  expect(songFacts(song("x", "", { writtenKey: null, demo: "ferry" })).line).toBe(
+    "No key yet, a song to try Larkspan with, no melody yet.",
+  );
 });
 
 test("beat and tempo in words", () => {

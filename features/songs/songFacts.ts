@@ -12,7 +12,11 @@ export interface SongFacts {
 export function songFacts(song: Song): SongFacts {
   const sign = song.writtenKey && glyphs(keySign(song.writtenKey));
   const key = sign === null ? "No key yet" : `Written in ${sign}`;
-  const parts = [key, song.demo === null ? null : "a song to try Larkspan with", song.tune === null ? "no melody yet" : null];
+  const parts = [
+    key,
+    song.demo === null ? null : "a song to try Larkspan with",
+    song.tune === null ? "no melody yet" : null,
+  ];
   return { sign, line: `${parts.filter((part) => part !== null).join(", ")}.` };
 }
 
@@ -26,7 +30,8 @@ export function beatWords(song: Pick<Song, "beatsPerBar" | "tempo">): string | n
 /** The line of facts under the title on a wide screen. */
 export function headWords(song: Song): string {
   const key = song.writtenKey === null ? "No key yet" : `Written in ${glyphs(keyWords(song.writtenKey))}`;
-  const beats = song.beatsPerBar === null ? null : `${song.beatsPerBar} ${song.beatsPerBar === 1 ? "beat" : "beats"} in a bar`;
+  const beats =
+    song.beatsPerBar === null ? null : `${song.beatsPerBar} ${song.beatsPerBar === 1 ? "beat" : "beats"} in a bar`;
   const tempo = song.tempo === null ? null : `${song.tempo} a minute`;
   const beat = [beats, tempo].filter((part) => part !== null).join(", ");
   return beat === "" ? key : `${key} · ${beat}`;
@@ -34,7 +39,9 @@ export function headWords(song: Song): string {
 
 /** Songs whose title or words hold every word searched for; titles first. */
 export function songsNamed(songs: readonly Song[], search: string): Song[] {
-  const words = plain(search).split(/\s+/).filter((word) => word !== "");
+  const words = plain(search)
+    .split(/\s+/)
+    .filter((word) => word !== "");
   const holds = (text: string) => words.every((word) => plain(text).includes(word));
   const titled = songs.filter((song) => holds(song.title));
   return [...titled, ...songs.filter((song) => !titled.includes(song) && holds(`${song.title}\n${song.chart}`))];

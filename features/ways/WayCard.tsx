@@ -43,7 +43,14 @@ export function WayCard({ way, instrument, chosen, radio, onChoose }: WayCardPro
         </View>
         <RadioDot on={chosen} />
       </Pressable>
-      <View style={webStyle({ display: "grid", gridTemplateColumns: "repeat(auto-fill, minmax(80px, 1fr))", rowGap: 10, marginTop: 6 })}>
+      <View
+        style={webStyle({
+          display: "grid",
+          gridTemplateColumns: "repeat(auto-fill, minmax(80px, 1fr))",
+          rowGap: 10,
+          marginTop: 6,
+        })}
+      >
         {way.chords.map((chord) => (
           <Grid key={chord.written} chord={chord} way={way} instrument={instrument} moved={moved} />
         ))}
@@ -53,7 +60,17 @@ export function WayCard({ way, instrument, chosen, radio, onChoose }: WayCardPro
   );
 }
 
-function Grid({ chord, way, instrument, moved }: { chord: WayChord; way: Way; instrument: Instrument; moved: boolean }) {
+function Grid({
+  chord,
+  way,
+  instrument,
+  moved,
+}: {
+  chord: WayChord;
+  way: Way;
+  instrument: Instrument;
+  moved: boolean;
+}) {
   const sounds = moved ? { sounds: glyphs(chord.sounding) } : null;
   if (chord.shape)
     return (
@@ -64,7 +81,9 @@ function Grid({ chord, way, instrument, moved }: { chord: WayChord; way: Way; in
           strings={instrument.strings.length}
           capo={way.capo}
           leftHanded={instrument.leftHanded}
-          stringNames={instrument.strings.map(({ note }, index) => (way.strings[index]?.to ?? note).replace(/-?\d+$/, ""))}
+          stringNames={instrument.strings.map(({ note }, index) =>
+            (way.strings[index]?.to ?? note).replace(/-?\d+$/, ""),
+          )}
           {...sounds}
         />
       </View>

@@ -5,18 +5,22 @@ import { Heading } from "@/features/ui/Heading";
 import { Notice } from "@/features/ui/Notice";
 import { Text } from "@/features/ui/Text";
 import { webStyle } from "@/features/ui/webStyle";
+import type { KeyName } from "@/shared/music/keyName";
+import { keySign } from "@/shared/music/keyWords";
+import { glyphs } from "@/shared/music/pitch";
 
 export interface WayColumnProps {
   songId: string;
   /** the key they lead into; null where the song has none */
-  target: { sign: string; tonic: string; shift: number } | null;
+  into: KeyName | null;
+  shift: number;
   instrument: string;
-  list: ReactNode;
   error: Error | null;
+  children: ReactNode;
 }
 
 /** The right column of a wide song page. */
-export function WayColumn({ songId, target, instrument, list, error }: WayColumnProps) {
+export function WayColumn({ songId, into, shift, instrument, error, children }: WayColumnProps) {
   return (
     <View testID="way-pane">
       <View
@@ -30,7 +34,7 @@ export function WayColumn({ songId, target, instrument, list, error }: WayColumn
           marginBottom: 10,
         }}
       >
-        <Heading level={2}>{target ? `Ways to play ${target.sign}` : "Ways to play it"}</Heading>
+        <Heading level={2}>{into ? `Ways to play ${glyphs(keySign(into))}` : "Ways to play it"}</Heading>
         <Text variant="small" tone="soft" style={{ fontSize: 13 }}>
           {instrument}
         </Text>
@@ -41,13 +45,13 @@ export function WayColumn({ songId, target, instrument, list, error }: WayColumn
           title="This is not saved"
         >{`${error.message} Your choice is still here; try again.`}</Notice>
       )}
-      {list}
-      {target && (
+      {children}
+      {into && (
         <View style={{ marginTop: 12 }}>
           <Link
             href={{
               pathname: "/songs/[id]/ways",
-              params: { id: songId, key: target.tonic, shift: String(target.shift) },
+              params: { id: songId, key: into.tonic, shift: String(shift) },
             }}
             style={webStyle(link)}
           >

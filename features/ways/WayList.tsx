@@ -22,7 +22,13 @@ export function WayList({ ways, instrument, chosen, onChoose }: WayListProps) {
       {ways.map((way, index) => (
         <View key={`${way.retune},${way.capo},${way.shapeKey}`} {...webProps({ onClick: () => onChoose(index) })}>
           <Card selected={index === chosen} style={{ padding: index === chosen ? 11 : 12, paddingBottom: 10 }}>
-            <WayCard way={way} instrument={instrument} chosen={index === chosen} radio={keys(index)} onChoose={() => onChoose(index)} />
+            <WayCard
+              way={way}
+              instrument={instrument}
+              chosen={index === chosen}
+              radio={keys(index)}
+              onChoose={() => onChoose(index)}
+            />
           </Card>
         </View>
       ))}

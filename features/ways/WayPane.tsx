@@ -1,17 +1,19 @@
 import { useState, type ReactNode } from "react";
-import { View } from "react-native";
 import { Button } from "@/features/ui/Button";
 import { EmptyState } from "@/features/ui/EmptyState";
 import { ErrorState } from "@/features/ui/ErrorState";
 import { LinkButton } from "@/features/ui/LinkButton";
 import { Skeleton } from "@/features/ui/Skeleton";
+import type { KeyName } from "@/shared/music/keyName";
+import { keySign } from "@/shared/music/keyWords";
+import { glyphs } from "@/shared/music/pitch";
 import type { Instrument } from "@/shared/instruments/instrument";
 import type { Way } from "@/shared/ways/way";
 import { WayList } from "./WayList";
 import { takeLabel, takeLabelIn, wayKept } from "./wayWords";
 
 /** What is asked of a search that runs on this device. */
-export interface WaySearch {
+interface WaySearch {
   data: Way[] | undefined;
   error: Error | null;
   refetch: () => unknown;
@@ -20,7 +22,7 @@ export interface WaySearch {
 export interface WayPaneProps {
   songId: string;
   /** the key they lead into: in another key the choice starts anew */
-  into: string;
+  into: KeyName | null;
   hasChords: boolean;
   search: WaySearch;
   instrument: Instrument;
@@ -28,8 +30,8 @@ export interface WayPaneProps {
   kept: Pick<Way, "retune" | "capo" | "shapeKey"> | null;
   saving: boolean;
   onUse: (way: Way) => void;
-  /** name of the key, where the page's head does not say it */
-  sign?: string | undefined;
+  /** the button names the key, where the page's head does not */
+  named?: boolean;
   /** how many ways are shown at first; all unless told otherwise */
   most?: number;
   /** where the ways stand, and where the button that takes one */
@@ -37,13 +39,30 @@ export interface WayPaneProps {
 }
 
 /** The ways into one key, one of them chosen, and the button that keeps it. */
-export function WayPane({ songId, into, hasChords, search, instrument, kept, saving, onUse, sign, most, children }: WayPaneProps) {
+export function WayPane({
+  songId,
+  into,
+  hasChords,
+  search,
+  instrument,
+  kept,
+  saving,
+  onUse,
+  named = false,
+  most,
+  children,
+}: WayPaneProps) {
   const [chosen, setChosen] = useState<string | null>(null);
   const found = search.data;
   const keptWay = found ? wayKept(found, kept) : null;
   const shown = found?.slice(0, most ?? found.length) ?? [];
   const ways = keptWay && !shown.includes(keptWay) ? [...shown, keptWay] : shown;
-  const at = Math.max(0, chosen?.startsWith(`${into} `) !== true && keptWay ? ways.indexOf(keptWay) : ways.findIndex((way) => idOf(into, way) === chosen));
+  const at = Math.max(
+    0,
+    chosen?.startsWith(`${into?.tonic} `) !== true && keptWay
+      ? ways.indexOf(keptWay)
+      : ways.findIndex((way) => idOf(into, way) === chosen),
+  );
   const way = ways[at];
   const isKept = way !== undefined && way === keptWay;
   if (!hasChords)
@@ -54,28 +73,65 @@ export function WayPane({ songId, into, hasChords, search, instrument, kept, sav
           testID="ways-need-chords"
           title="No chords yet"
           text="Ways are found for the chords of the song. Paste its chart, and the shapes for every key stand here."
-          action={<LinkButton href={{ pathname: "/songs/[id]/edit", params: { id: songId } }} label="Give the chart" icon="edit" small />}
+          action={
+            <LinkButton
+              href={{ pathname: "/songs/[id]/edit", params: { id: songId } }}
+              label="Give the chart"
+              icon="edit"
+              small
+            />
+          }
         />
       ),
     });
   if (search.error)
     return children({
       use: null,
-      list: <ErrorState title="The ways could not be found" text="The search did not run. The song is safe; try again." onRetry={() => void search.refetch()} />,
+      list: (
+        <ErrorState
+          title="The ways could not be found"
+          text="The search did not run. The song is safe; try again."
+          onRetry={() => void search.refetch()}
+        />
+      ),
     });
-  if (!found) return children({ use: null, list: <Skeleton bars={[{ height: 182 }, { height: 182 }, { height: 166 }]} words="Looking for ways to play it" /> });
+  if (!found)
+    return children({
+      use: null,
+      list: <Skeleton bars={[{ height: 182 }, { height: 182 }, { height: 166 }]} words="Looking for ways to play it" />,
+    });
   if (!way)
     return children({
       use: null,
-      list: <EmptyState title="No way on this instrument" text="None of the song's chords can be played on it in this key. Try another instrument or another key." />,
+      list: (
+        <EmptyState
+          title="No way on this instrument"
+          text="None of the song's chords can be played on it in this key. Try another instrument or another key."
+        />
+      ),
     });
-  const label = sign === undefined ? takeLabel(way) : takeLabelIn(sign, way);
+  const label = named && into ? takeLabelIn(glyphs(keySign(into)), way) : takeLabel(way);
   return children({
-    list: <WayList ways={ways} instrument={instrument} chosen={at} onChoose={(index) => setChosen(idOf(into, ways[index]))} />,
-    use: <Button label={isKept ? label.replace("Use", "You use") : label} busy={saving} disabled={isKept} onPress={() => onUse(way)} testID="use-way" />,
+    list: (
+      <WayList
+        ways={ways}
+        instrument={instrument}
+        chosen={at}
+        onChoose={(index) => setChosen(idOf(into, ways[index]))}
+      />
+    ),
+    use: (
+      <Button
+        label={isKept ? label.replace("Use", "You use") : label}
+        busy={saving}
+        disabled={isKept}
+        onPress={() => onUse(way)}
+        testID="use-way"
+      />
+    ),
   });
 }
 
-function idOf(into: string, way: Way | undefined): string | null {
-  return way ? `${into} ${way.retune},${way.capo},${way.shapeKey}` : null;
+function idOf(into: KeyName | null, way: Way | undefined): string | null {
+  return way ? `${into?.tonic} ${way.retune},${way.capo},${way.shapeKey}` : null;
 }

@@ -29,7 +29,9 @@ export function WaysScreen({ song, sign, instrument, chooser, list, use, chart, 
   const column = { flexGrow: 1, flexShrink: 1, flexBasis: 0, minWidth: 0 } as const;
   const main = (
     <View style={{ gap: 8 }}>
-      {error && <Notice kind="error" title="This is not saved">{`${error.message} The ways are still here; try again.`}</Notice>}
+      {error && (
+        <Notice kind="error" title="This is not saved">{`${error.message} The ways are still here; try again.`}</Notice>
+      )}
       {chooser}
       <WishPanel />
       {list}
@@ -37,7 +39,13 @@ export function WaysScreen({ song, sign, instrument, chooser, list, use, chart, 
     </View>
   );
   const aside = (
-    <View testID="moved-chart" style={{ gap: 10, ...(phone ? { borderTopWidth: 1, borderColor: colors.line, paddingTop: 16, marginTop: 20 } : null) }}>
+    <View
+      testID="moved-chart"
+      style={{
+        gap: 10,
+        ...(phone ? { borderTopWidth: 1, borderColor: colors.line, paddingTop: 16, marginTop: 20 } : null),
+      }}
+    >
       <Heading level={2}>{`Chart in ${sign}`}</Heading>
       {chart}
     </View>

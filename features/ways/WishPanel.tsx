@@ -34,7 +34,15 @@ export function WishPanel() {
         )}
       </View>
       {open && (
-        <View style={{ borderTopWidth: 1, borderBottomWidth: 1, borderColor: colors.line, paddingVertical: 8, marginBottom: 8 }}>
+        <View
+          style={{
+            borderTopWidth: 1,
+            borderBottomWidth: 1,
+            borderColor: colors.line,
+            paddingVertical: 8,
+            marginBottom: 8,
+          }}
+        >
           <View style={{ flexDirection: "row", flexWrap: "wrap", columnGap: 8 }}>
             <Chip label="Avoid barres" selected={wishes.noBarre} onPress={() => turn("noBarre")} />
             <Chip label="Avoid a capo" selected={wishes.noCapo} onPress={() => turn("noCapo")} />
@@ -44,8 +52,18 @@ export function WishPanel() {
             <Text variant="small" style={{ minWidth: 128 }} aria-live="polite">
               {`Highest capo: fret ${wishes.highestCapo}`}
             </Text>
-            <IconButton icon="minus" label="Highest capo one fret lower" disabled={wishes.highestCapo <= 1} onPress={() => setWishes({ ...wishes, highestCapo: wishes.highestCapo - 1 })} />
-            <IconButton icon="plus" label="Highest capo one fret higher" disabled={wishes.highestCapo >= highest} onPress={() => setWishes({ ...wishes, highestCapo: wishes.highestCapo + 1 })} />
+            <IconButton
+              icon="minus"
+              label="Highest capo one fret lower"
+              disabled={wishes.highestCapo <= 1}
+              onPress={() => setWishes({ ...wishes, highestCapo: wishes.highestCapo - 1 })}
+            />
+            <IconButton
+              icon="plus"
+              label="Highest capo one fret higher"
+              disabled={wishes.highestCapo >= highest}
+              onPress={() => setWishes({ ...wishes, highestCapo: wishes.highestCapo + 1 })}
+            />
           </View>
         </View>
       )}

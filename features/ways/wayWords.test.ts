@@ -9,7 +9,13 @@ const way = (retune: number, capo: number, shapeKey: string): Way => ({
   soundingKey: "C",
   chords: [],
   difficulty: 0.2,
-  strings: ["A3", "D4", "F#4"].map((from) => ({ from, to: retune === 0 ? from : "X", beforeLb: null, afterLb: null, verdict: "fine" })),
+  strings: ["A3", "D4", "F#4"].map((from) => ({
+    from,
+    to: retune === 0 ? from : "X",
+    beforeLb: null,
+    afterLb: null,
+    verdict: "fine",
+  })),
   title: "",
   cost: "",
   cautions: [],
@@ -27,12 +33,9 @@ test.each([
 });
 
 test("beside no key's name the button says the key too", () => {
-  expect([way(0, 0, "C"), way(0, 3, "A"), way(-2, 0, "D"), way(-1, 1, "Bb")].map((each) => takeLabelIn("C", each))).toEqual([
-    "Use C as tuned",
-    "Use C with capo 3",
-    "Use C in this tuning",
-    "Use C in this tuning, capo 1",
-  ]);
+  expect(
+    [way(0, 0, "C"), way(0, 3, "A"), way(-2, 0, "D"), way(-1, 1, "Bb")].map((each) => takeLabelIn("C", each)),
+  ).toEqual(["Use C as tuned", "Use C with capo 3", "Use C in this tuning", "Use C in this tuning, capo 1"]);
 });
 
 test("the cost says how hard it is and what is retuned", () => {

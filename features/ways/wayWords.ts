@@ -41,5 +41,7 @@ export function shortCost(way: Pick<Way, "difficulty" | "retune" | "strings" | "
 /** The way that was kept with a decision, among those found now. */
 export function wayKept(ways: readonly Way[], kept: Pick<Way, "retune" | "capo" | "shapeKey"> | null): Way | null {
   if (kept === null) return null;
-  return ways.find((way) => way.retune === kept.retune && way.capo === kept.capo && way.shapeKey === kept.shapeKey) ?? null;
+  return (
+    ways.find((way) => way.retune === kept.retune && way.capo === kept.capo && way.shapeKey === kept.shapeKey) ?? null
+  );
 }

@@ -17,5 +17,7 @@ test("what is to be avoided weighs most", () => {
 
 test("wishes in one line", () => {
   expect(wishWords(usualWishes)).toBe("capo 7 or lower");
-  expect(wishWords({ ...usualWishes, noBarre: true, noRetune: true })).toBe("no barres, nothing retuned, capo 7 or lower");
+  expect(wishWords({ ...usualWishes, noBarre: true, noRetune: true })).toBe(
+    "no barres, nothing retuned, capo 7 or lower",
+  );
 });

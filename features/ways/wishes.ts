@@ -28,7 +28,11 @@ export function preferencesOf(wishes: Wishes): WayPreferences {
 
 /** The wishes in one line, for the head of the fold that holds them. */
 export function wishWords(wishes: Wishes): string {
-  const avoided = [wishes.noBarre && "no barres", wishes.noCapo && "no capo", wishes.noRetune && "nothing retuned"].filter((word) => word !== false);
+  const avoided = [
+    wishes.noBarre && "no barres",
+    wishes.noCapo && "no capo",
+    wishes.noRetune && "nothing retuned",
+  ].filter((word) => word !== false);
   return [...avoided, `capo ${wishes.highestCapo} or lower`].join(", ");
 }
 
@@ -36,8 +40,15 @@ export function wishWords(wishes: Wishes): string {
 export function readWishes(text: string | null): Wishes {
   try {
     const kept = (JSON.parse(text ?? "null") ?? {}) as Partial<Wishes>;
-    const highest = Number.isInteger(kept.highestCapo) ? Math.min(9, Math.max(1, kept.highestCapo ?? 0)) : usualWishes.highestCapo;
-    return { noBarre: kept.noBarre === true, noCapo: kept.noCapo === true, noRetune: kept.noRetune === true, highestCapo: highest };
+    const highest = Number.isInteger(kept.highestCapo)
+      ? Math.min(9, Math.max(1, kept.highestCapo ?? 0))
+      : usualWishes.highestCapo;
+    return {
+      noBarre: kept.noBarre === true,
+      noCapo: kept.noCapo === true,
+      noRetune: kept.noRetune === true,
+      highestCapo: highest,
+    };
   } catch {
     return usualWishes;
   }

@@ -12,11 +12,15 @@ test.each([
 
 test("a key moved there and back has its tonic again", () => {
   fc.assert(
-    fc.property(fc.constantFrom("C", "D", "Eb", "F#", "Ab", "B"), fc.integer({ min: -24, max: 24 }), (tonic, semitones) => {
-      const there = movedKey({ tonic, mode: "major" }, semitones);
-      expect(tonicPitchClass(movedKey(there, -semitones).tonic)).toBe(tonicPitchClass(tonic));
-      expect((tonicPitchClass(tonic) + semitones + 24) % 12).toBe(tonicPitchClass(there.tonic));
-    }),
+    fc.property(
+      fc.constantFrom("C", "D", "Eb", "F#", "Ab", "B"),
+      fc.integer({ min: -24, max: 24 }),
+      (tonic, semitones) => {
+        const there = movedKey({ tonic, mode: "major" }, semitones);
+        expect(tonicPitchClass(movedKey(there, -semitones).tonic)).toBe(tonicPitchClass(tonic));
+        expect((tonicPitchClass(tonic) + semitones + 24) % 12).toBe(tonicPitchClass(there.tonic));
+      },
+    ),
   );
 });
 

@@ -9,7 +9,13 @@ export default function EditSongRoute() {
   const router = useRouter();
   return (
     <SongState query={useQuery(songQueries.detail(id))} title="Edit the song">
-      {(song) => <EditScreen key={song.id} song={song} onSaved={() => router.replace({ pathname: "/songs/[id]", params: { id } })} />}
+      {(song) => (
+        <EditScreen
+          key={song.id}
+          song={song}
+          onSaved={() => router.replace({ pathname: "/songs/[id]", params: { id } })}
+        />
+      )}
     </SongState>
   );
 }

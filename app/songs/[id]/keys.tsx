@@ -1,11 +1,9 @@
 import { useQuery } from "@tanstack/react-query";
 import { useLocalSearchParams } from "expo-router";
-import { useMemo } from "react";
 import { InstrumentSelect } from "@/features/instruments/InstrumentSelect";
 import { stringWords } from "@/features/instruments/myInstruments";
 import { useInstrument } from "@/features/instruments/useInstrument";
 import { KeysScreen } from "@/features/keys/KeysScreen";
-import { songChords, writtenKeyOf } from "@/features/keys/songKeys";
 import { useSongKeys } from "@/features/keys/useSongKeys";
 import { SongState } from "@/features/songs/SongState";
 import { songQueries } from "@/features/songs/songQueries";
@@ -26,22 +24,23 @@ export default function KeysRoute() {
 }
 
 function Keys({ song }: { song: Song }) {
-  const { voice, singing, isPending } = useSingingVoice();
+  const singer = useSingingVoice();
   const { instrument, owned, choose } = useInstrument();
   const [wishes] = useWishes();
-  const keys = useSongKeys(song, singing);
+  const keys = useSongKeys(song, singer);
   const wide = useLayout() === "wide";
-  const chords = useMemo(() => songChords(song), [song]);
-  const from = writtenKeyOf(song);
   const rows = keys.rows ?? [];
   // Only the table shows a way in every row; the phone asks for the ways of one key, on their own page.
-  const best = useBestWays(wide && from ? { chords, from, instrument, wishes } : null, rows.map((row) => row.key));
+  const best = useBestWays(
+    wide && keys.written ? { ...keys.written, instrument, wishes } : null,
+    rows.map((row) => row.key),
+  );
   return (
     <KeysScreen
       song={song}
       keys={keys}
-      pending={isPending}
-      voice={voice}
+      pending={singer.isPending}
+      voice={singer.voice}
       wayOf={(row) => {
         const way = best[rows.indexOf(row)];
         return way ? { title: shortWay(way), cost: shortCost(way) } : way;

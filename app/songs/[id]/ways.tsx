@@ -1,11 +1,10 @@
 import { useQuery } from "@tanstack/react-query";
 import { useLocalSearchParams } from "expo-router";
-import { useMemo } from "react";
 import { InstrumentSelect } from "@/features/instruments/InstrumentSelect";
 import { instrumentWords } from "@/features/instruments/myInstruments";
 import { useInstrument } from "@/features/instruments/useInstrument";
 import { DecidedLine } from "@/features/keys/DecidedLine";
-import { askedKey, songChords, writtenKeyOf } from "@/features/keys/songKeys";
+import { askedKey } from "@/features/keys/songKeys";
 import { useSongKeys } from "@/features/keys/useSongKeys";
 import { MovedChart } from "@/features/songs/MovedChart";
 import { SongState } from "@/features/songs/SongState";
@@ -30,26 +29,22 @@ export default function WaysRoute() {
 
 function Ways({ song }: { song: Song }) {
   const asked = useLocalSearchParams<{ key?: string; shift?: string }>();
-  const { voice, singing } = useSingingVoice();
   const { instrument, owned, choose, error } = useInstrument();
   const [wishes] = useWishes();
-  const keys = useSongKeys(song, singing);
-  const chords = useMemo(() => songChords(song), [song]);
-  const from = writtenKeyOf(song);
+  const keys = useSongKeys(song, useSingingVoice());
   const { key, shift } = askedKey(song, keys.inHand, asked.key, asked.shift);
-  const search = useQuery(wayQueries.into(from && { chords, from, instrument, wishes }, key));
+  const search = useQuery(wayQueries.into(keys.written && { ...keys.written, instrument, wishes }, key));
   const mine = keys.decision?.shift === shift ? keys.decision : null;
-  const take = { tonic: key.tonic, shift, voiceId: voice?.id ?? null, instrument: instrument.id };
   return (
     <WayPane
       songId={song.id}
-      into={key.tonic}
-      hasChords={chords.length > 0 && from !== null}
+      into={key}
+      hasChords={keys.written !== null}
       search={search}
       instrument={instrument}
       kept={mine?.instrument === instrument.id ? mine.way : null}
       saving={keys.saving}
-      onUse={(way) => keys.take({ ...take, way })}
+      onUse={(way) => keys.take({ tonic: key.tonic, shift, instrument: instrument.id, way })}
     >
       {(parts) => (
         <WaysScreen

@@ -37,7 +37,7 @@ export function KeepTake({ voices, chosenId, busy, onKeep, onCancel }: KeepTakeP
     else onKeep({ ...fresh, name: name.trim() });
   };
   return (
-    <View ref={panel}>
+    <View ref={panel} style={{ maxWidth: 560 }}>
       <Card testID="keep-panel">
         <Form label="Keep this voice" onSubmit={keep}>
           <Heading level={2}>Where does it belong?</Heading>

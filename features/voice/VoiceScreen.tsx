@@ -76,7 +76,7 @@ function NoVoiceYet() {
 }
 
 function ChosenVoice({ voice, voices, takes }: { voice: Voice; voices: Voice[]; takes: Take[] }) {
-  const wide = useLayout() !== "phone";
+  const wide = useLayout() === "wide";
   const save = useSaveVoice();
   const remove = useRemoveVoice();
   const erase = useEraseTake();
@@ -94,7 +94,7 @@ function ChosenVoice({ voice, voices, takes }: { voice: Voice; voices: Voice[]; 
       <View style={wide ? { flexBasis: 0, flexGrow: 1 } : null}>
         <VoicePicture voice={voice} takes={own} onUseTakes={() => save.mutate({ ...voice, byHand: null })} />
       </View>
-      <View style={[{ gap: 28 }, wide ? { flexBasis: 0, flexGrow: 1, maxWidth: 560 } : null]}>
+      <View style={[{ gap: 28 }, wide ? { flexBasis: 0, flexGrow: 1, maxWidth: 560 } : { maxWidth: 720 }]}>
         {refusal && (
           <Notice kind="error" title="Not done">
             {`${refusal.message} Nothing was changed.`}

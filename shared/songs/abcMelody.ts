@@ -29,8 +29,22 @@ interface AbcEvent {
   startChar?: number;
 }
 
-const mostNotes = 100_000;
 const mostTunes = 50;
+/**
+ * Beyond these the parser takes time that grows with their square, or so much memory for one endless note that the whole
+ * program stops; no song comes near them.
+ */
+const most = {
+  characters: 200_000,
+  lines: 5_000,
+  notes: 20_000,
+  lineLength: 10_000,
+  signs: 2_000,
+  bars: 10_000,
+  overlays: 200,
+  restedBars: 2_000,
+  digits: 4,
+};
 /** Fine enough for tuplets of 3, 5 and 7 down to a sixty-fourth; undoes the parser's rounding to six places. */
 const grid = 6720;
 const modes: Record<string, Mode> = {
@@ -53,18 +67,46 @@ const modes: Record<string, Mode> = {
  */
 export function readAbc(text: string): WrittenFile {
   if (!/^\s*K:/m.test(text)) return { ok: false, reason: "This is no ABC tune: its K: line is missing." };
-  const bodies = text.replace(/^\s*(?:[A-Zw+]:|%).*$/gm, "");
-  if ((bodies.match(/[A-Ga-g]/g)?.length ?? 0) > mostNotes)
-    return { ok: false, reason: "This file holds too many notes." };
+  const book = firstTunes(text);
+  if (!sizeOfASong(book))
+    return { ok: false, reason: "This ABC file holds too many notes or signs, or lengths that no song has." };
   try {
-    const tunes = parseOnly(text) as unknown as AbcTune[];
-    const voices = tunes.slice(0, mostTunes).flatMap((tune) => readTune(tune, tunes.length > 1));
+    const tunes = parseOnly(book) as unknown as AbcTune[];
+    const voices = tunes.flatMap((tune) => readTune(tune, tunes.length > 1));
     if (voices.every((voice) => voice.notes.length === 0))
       return { ok: false, reason: "There are no notes in this ABC file." };
     return { ok: true, title: tunes[0] ? titleOf(tunes[0]) : null, voices };
   } catch {
     return { ok: false, reason: "This ABC file cannot be read; something in its notes is malformed." };
   }
+}
+
+/** What stands before the first tune, and the first tunes of a book, without directives: they shape pages and players. */
+function firstTunes(text: string): string {
+  const starts = [...text.matchAll(/^X:/gm)].map((match) => match.index);
+  return text.slice(0, starts[mostTunes] ?? text.length).replace(/^%%.*$/gm, "%");
+}
+
+function sizeOfASong(text: string): boolean {
+  const lines = text.split("\n");
+  const music = lines.filter((line) => !/^\s*(?:[A-Zw+]:|%)/.test(line)).join("\n");
+  const lengths = lines.filter((line) => /^\s*[LMQ]:/.test(line)).join("\n") + music.replace(/"[^"\n]*"/g, "");
+  const restedBars = [...music.matchAll(/[ZX](\d+)/g)].reduce((sum, match) => sum + Number(match[1]), 0);
+  const count = (signs: RegExp) => music.match(signs)?.length ?? 0;
+  return (
+    text.length <= most.characters &&
+    lines.length <= most.lines &&
+    lines.every((line) => line.length <= most.lineLength) &&
+    count(/[A-Ga-g]/g) <= most.notes &&
+    count(/[{}!"+]/g) <= most.signs * 4 &&
+    count(/\|/g) <= most.bars &&
+    count(/[{]/g) <= most.signs &&
+    count(/&/g) <= most.overlays &&
+    restedBars <= most.restedBars &&
+    !/[<>]{4}/.test(music) &&
+    !/\/\s*0/.test(lengths) &&
+    !(lengths.match(/\d+/g) ?? []).some((number) => number.length > most.digits)
+  );
 }
 
 function readTune(tune: AbcTune, several: boolean): WrittenVoice[] {
@@ -89,7 +131,7 @@ function readTune(tune: AbcTune, several: boolean): WrittenVoice[] {
     const written = track.find((event) => event.cmd === "text" && event.type === "name")?.text?.trim();
     const own = written || (tracks.length > 1 ? `Voice ${index + 1}` : (title ?? "Tune"));
     const sounding = track.filter(
-      (event) => event.cmd === "note" && event.pitch !== undefined && (event.duration ?? 0) > 0,
+      ({ cmd, pitch = -1, duration = 0 }) => cmd === "note" && pitch >= 0 && pitch <= 127 && duration > 0,
     );
     const notes = sounding.map((event) => {
       const start = onGrid((event.start ?? 0) * 4);

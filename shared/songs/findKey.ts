@@ -1,4 +1,4 @@
-import { type KeyName, keyFifths, spellTonic, tonicPitchClass } from "../music/keyName";
+import { type KeyName, keyFifths, type Mode, scaleSteps, spellTonic, tonicPitchClass } from "../music/keyName";
 import { glyphs } from "../music/pitch";
 import { type Chart, chartTokens } from "./chart";
 import { chordEvidence } from "./chordEvidence";
@@ -9,6 +9,8 @@ import type { MelodyNote } from "./melody";
 export interface KeyEvidence {
   chart?: Chart;
   notes?: readonly MelodyNote[];
+  /** the key somebody wrote down for it; it weighs much, but notes and chords that plainly speak against it win */
+  stated?: KeyName;
 }
 
 /** A key with its score; only differences between scores mean something. */
@@ -33,6 +35,8 @@ export interface KeyFinding {
 export const closeMargin = 0.05;
 /** Steepness of belief: with much to go by, a lead of this much makes a key e times as likely as the next. */
 const temperature = 0.05;
+/** What a written key is worth, on the scale of the scores. */
+const statedWorth = 0.25;
 /** With this many chords the belief is half as steep; a note tells a third of what a chord does. */
 const fewChords = 8;
 const modes = ["major", "minor"] as const;
@@ -57,7 +61,8 @@ export function rankKeys(evidence: KeyEvidence): RankedKey[] {
     for (const mode of modes) {
       const score =
         chordShare * (ofChords?.score(tonic, mode) ?? 0) + (1 - chordShare) * (ofTune?.score(tonic, mode) ?? 0);
-      ranked.push({ key: spelled(tonic, mode, written.get(tonic)), score });
+      const word = isStated(evidence, tonic, mode) ? statedWorth : 0;
+      ranked.push({ key: spelled(tonic, mode, written.get(tonic)), score: score + word });
     }
   }
   return ranked.sort((a, b) => b.score - a.score);
@@ -83,12 +88,19 @@ export function findKey(evidence: KeyEvidence): KeyFinding | null {
   const { tonic, mode } = best.key;
   const pc = tonicPitchClass(tonic);
   const reasons = [
+    ...(isStated(evidence, pc, mode) ? [`It is written down as ${tonic} ${evidence.stated?.mode}.`] : []),
     ...(chordEvidence(tokens.flatMap((token) => (token.chord ? [token.chord] : [])))?.reasons(pc, mode, best.key) ??
       []),
     ...(melodyEvidence(evidence.notes ?? [])?.reasons(pc, mode, best.key) ?? []),
   ];
   if (margin < closeMargin) reasons.push(`It could be ${next.key.tonic} ${next.key.mode}: the two are close.`);
   return { key: best.key, runnerUp: next.key, confidence, margin, reasons: [...new Set(reasons)].map(glyphs) };
+}
+
+/** A mode counts as major or minor by its third. */
+function isStated({ stated }: KeyEvidence, tonic: number, mode: Mode): boolean {
+  if (!stated || tonicPitchClass(stated.tonic) !== tonic) return false;
+  return scaleSteps(stated.mode).includes(mode === "minor" ? 3 : 4);
 }
 
 /** As the chart writes it where that is a key people use, else with the fewest accidentals. */

@@ -65,7 +65,7 @@ function finished(voice: WrittenVoice): MelodyVoice {
   const starts = new Set(notes.map((note) => note.start));
   const lyrics = voice.lyrics.filter((word) => starts.has(word.start));
   const melody: Melody = { notes, ...homeOf(voice, notes) };
-  return { name: voice.name, melody, ...(lyrics.length > 0 ? { lyrics } : {}) };
+  return { name: voice.name, melody, stated: voice.key, ...(lyrics.length > 0 ? { lyrics } : {}) };
 }
 
 /** What the file says; where it names only a signature, or nothing, the notes themselves are asked. */

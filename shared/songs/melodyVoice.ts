@@ -5,6 +5,8 @@ import type { Melody, MelodyNote } from "./melody";
 export interface MelodyVoice {
   name: string;
   melody: Melody;
+  /** the key the file states; null where it states none, and the melody's home note was found from its notes */
+  stated: KeyName | null;
   /** syllables with the start of their note in quarter notes; absent where the file has no words */
   lyrics?: { start: number; text: string }[];
 }

@@ -42,7 +42,7 @@ interface Part {
 export function readMusicXml(source: string): WrittenFile {
   if (/<!ENTITY/i.test(source))
     return { ok: false, reason: "This MusicXML file declares entities of its own, so it is not read." };
-  if ((source.match(/<note[\s>]/g)?.length ?? 0) > mostNotes)
+  if ((source.match(/<note[\s/>]/g)?.length ?? 0) > mostNotes)
     return { ok: false, reason: "This file holds too many notes." };
   const score = parseXml(source);
   if (!score) return { ok: false, reason: "This MusicXML file cannot be read; it is malformed." };

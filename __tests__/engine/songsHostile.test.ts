@@ -1,0 +1,250 @@
+import { Midi } from "@tonejs/midi";
+import fc from "fast-check";
+import { strToU8, zipSync } from "fflate";
+import { demoSongs } from "../../shared/songs/demoSongs";
+import { type MelodyFile, readMelodyFile } from "../../shared/songs/melodyFile";
+
+const score = (inside: string) => `<score-partwise><part-list/><part id="P">${inside}</part></score-partwise>`;
+const oneNote = "<note><pitch><step>C</step><octave>4</octave></pitch><duration>1</duration></note>";
+const midiHead = [...strToU8("MThd"), 0, 0, 0, 6, 0, 0, 0, 1, 0, 96];
+const midiTrack = (events: number[]) => {
+  const length = [24, 16, 8, 0].map((shift) => (events.length >> shift) & 0xff);
+  return Uint8Array.from([...midiHead, ...strToU8("MTrk"), ...length, ...events]);
+};
+const repeated = (events: number[], times: number) => Array.from({ length: times }, () => events).flat();
+
+/** How long a refusal may take; the machine that runs the tests may be busy. */
+const patienceMs = 3000;
+
+const hostile: [string, string, () => Uint8Array, RegExp][] = [
+  ["an empty file", "a.mid", () => new Uint8Array(0), /empty/],
+  ["a file of more than 5 MB", "a.abc", () => new Uint8Array(5_000_001), /5 MB/],
+  ["a kind that is not known", "a.pdf", () => strToU8("%PDF-1.7"), /not known/],
+  ["a zip bomb", "a.mxl", () => zipSync({ "bomb.xml": new Uint8Array(50_000_000) }, { level: 9 }), /unpacks/],
+  [
+    "a zip of many bombs",
+    "a.mxl",
+    () => zipSync(Object.fromEntries(Array.from({ length: 40 }, (_, k) => [`${k}.xml`, new Uint8Array(1_000_000)]))),
+    /unpacks/,
+  ],
+  [
+    "a zip of thousands of files",
+    "a.mxl",
+    () => zipSync(Object.fromEntries(Array.from({ length: 3000 }, (_, k) => [`${k}.txt`, new Uint8Array(1)]))),
+    /unpacks/,
+  ],
+  ["a cut-off zip", "a.mxl", () => zipSync({ "a.xml": strToU8(score(oneNote)) }).subarray(0, 60), /damaged|no score/],
+  ["a zip without a score", "a.mxl", () => zipSync({ "a.txt": strToU8("hello") }), /no score/],
+  [
+    "entities that multiply",
+    "a.xml",
+    () => {
+      const entities = Array.from({ length: 30 }, (_, k) => `<!ENTITY e${k + 1} "&e${k};&e${k};">`).join("");
+      return strToU8(
+        `<!DOCTYPE score-partwise [<!ENTITY e0 "la">${entities}]>${score(`<measure>&e30;${oneNote}</measure>`)}`,
+      );
+    },
+    /entities/,
+  ],
+  [
+    "an entity that asks for another file",
+    "a.xml",
+    () =>
+      strToU8(
+        `<!DOCTYPE score-partwise [<!ENTITY x SYSTEM "file:///etc/passwd">]>${score(`<measure>${oneNote}</measure>`)}`,
+      ),
+    /entities/,
+  ],
+  ["elements without end", "a.xml", () => strToU8("<a>".repeat(300_000)), /malformed|score/],
+  ["attributes without end", "a.xml", () => strToU8(`<a ${'b="c" '.repeat(300_000)}>`), /malformed|score/],
+  ["an XML file that is no score", "a.xml", () => strToU8("<html><body/></html>"), /no MusicXML score/],
+  [
+    "a score cut off",
+    "a.xml",
+    () => strToU8(score(`<measure>${oneNote}</measure>`).slice(0, 90)),
+    /malformed|no notes/i,
+  ],
+  ["a score without notes", "a.xml", () => strToU8(score("<measure/>")), /no notes/],
+  [
+    "a score of too many notes",
+    "a.xml",
+    () => strToU8(score(`<measure>${"<note/>".repeat(200_000)}</measure>`)),
+    /too many notes/,
+  ],
+  [
+    "a score of too many measures",
+    "a.xml",
+    () => strToU8(score(`<measure>${oneNote}</measure>${"<measure/>".repeat(100_000)}`)),
+    /larger than a song/,
+  ],
+  [
+    "repeats that go on and on",
+    "a.xml",
+    () =>
+      strToU8(
+        score(
+          `<measure>${oneNote.repeat(3)}<barline><repeat direction="backward" times="20"/></barline></measure>`.repeat(
+            5000,
+          ),
+        ),
+      ),
+    /too long/,
+  ],
+  [
+    "an ABC file of a million notes",
+    "a.abc",
+    () => strToU8(`X:1\nK:C\n${"CDEFGABc|\n".repeat(125_000)}`),
+    /too many notes/,
+  ],
+  ["a rest of a thousand million bars", "a.abc", () => strToU8("X:1\nK:C\nC Z999999999|C|"), /too many notes/],
+  ["a note lengthened without end", "a.abc", () => strToU8(`X:1\nK:C\nC${">".repeat(100)}D|`), /too many notes/],
+  ["a length divided by nothing", "a.abc", () => strToU8("X:1\nL:1/0\nK:C\nCDE|"), /too many notes/],
+  ["a hundred thousand grace brackets", "a.abc", () => strToU8(`X:1\nK:C\nC${"{".repeat(100_000)}|`), /too many notes/],
+  ["a hundred thousand lines", "a.abc", () => strToU8(`X:1\nK:C\n${"C\n".repeat(90_000)}`), /too many notes/],
+  ["an ABC file without a key", "a.abc", () => strToU8("X:1\nT:No key\nCDE"), /K: line/],
+  ["an ABC file without notes", "a.abc", () => strToU8("X:1\nK:C\nz4|z4|"), /no notes/],
+  [
+    "a MIDI file of too many notes",
+    "a.mid",
+    () => midiTrack(repeated([0, 0x90, 60, 64, 1, 0x80, 60, 0], 150_000)),
+    /too many notes/,
+  ],
+  ["a MIDI file whose notes never end", "a.mid", () => midiTrack(repeated([0, 0x90, 60, 64], 5000)), /too many notes/],
+  [
+    "a MIDI file of ends without notes",
+    "a.mid",
+    () => midiTrack(repeated([0, 0x80, 60, 64], 100_000)),
+    /too many notes/,
+  ],
+  ["a MIDI file of controllers only", "a.mid", () => midiTrack(repeated([0, 0xb0, 7, 64], 900_000)), /too many notes/],
+  ["a MIDI file cut off", "a.mid", () => new Uint8Array(new Midi().toArray()).subarray(0, 17), /damaged/],
+  [
+    "a MIDI file that lies about its length",
+    "a.mid",
+    () => Uint8Array.from([...midiHead, ...strToU8("MTrk"), 0x7f, 0xff, 0xff, 0xff, 0]),
+    /damaged/,
+  ],
+  ["text that calls itself MIDI", "a.mid", () => strToU8("hello"), /no MIDI/],
+];
+
+test.each(hostile)("%s ends in a clear refusal, quickly", (_, name, make, reason) => {
+  const bytes = make();
+  const begun = performance.now();
+  const read = readMelodyFile(name, bytes);
+  expect(performance.now() - begun).toBeLessThan(patienceMs);
+  expect(read).toEqual({ ok: false, reason: expect.stringMatching(reason) as string });
+});
+
+test("a zip whose header says less than it holds is measured by what comes out", () => {
+  const bytes = zipSync({ "bomb.xml": new Uint8Array(50_000_000) }, { level: 9 });
+  // Local header: uncompressed size at offset 22; central directory: at 24 behind its signature "PK\1\2".
+  const view = new DataView(bytes.buffer, bytes.byteOffset, bytes.byteLength);
+  const central = Buffer.from(bytes).indexOf("PK\x01\x02", 0, "latin1");
+  view.setUint32(22, 10, true);
+  view.setUint32(central + 24, 10, true);
+  const begun = performance.now();
+  expect(readMelodyFile("a.mxl", bytes)).toMatchObject({ ok: false });
+  expect(performance.now() - begun).toBeLessThan(patienceMs);
+});
+
+function sane(read: MelodyFile): void {
+  if (!read.ok) {
+    expect(read.reason).toMatch(/^[A-Z].*\.$/);
+    return;
+  }
+  expect(read.voices[read.proposed]).toBeDefined();
+  for (const { melody } of read.voices) {
+    let end = 0;
+    for (const { start, duration, midi } of melody.notes) {
+      expect(duration).toBeGreaterThan(0);
+      expect(start).toBeGreaterThanOrEqual(end - 1e-6);
+      expect(Number.isFinite(midi)).toBe(true);
+      end = start + duration;
+    }
+  }
+}
+
+describe("whatever is fed in, a tune or a refusal comes out:", () => {
+  const midi = new Midi();
+  const track = midi.addTrack();
+  [60, 64, 67, 72].forEach((pitch, index) => track.addNote({ midi: pitch, ticks: index * 480, durationTicks: 400 }));
+  const seeds: [string, Uint8Array][] = [
+    ["a.mid", Uint8Array.from(midi.toArray())],
+    ["a.abc", strToU8(demoSongs[0]!.abc)],
+    [
+      "a.xml",
+      strToU8(
+        score(
+          `<measure><attributes><divisions>2</divisions></attributes>${oneNote.repeat(4)}<barline><repeat direction="backward"/></barline></measure>`,
+        ),
+      ),
+    ],
+    ["a.mxl", zipSync({ "a.xml": strToU8(score(`<measure>${oneNote}</measure>`)) })],
+  ];
+
+  test.each(seeds)("%s with some bytes changed, dropped or doubled", (name, bytes) => {
+    const change = fc.tuple(fc.nat(bytes.length - 1), fc.nat(255), fc.constantFrom("set", "drop", "double"));
+    fc.assert(
+      fc.property(fc.array(change, { minLength: 1, maxLength: 8 }), (changes) => {
+        let data = [...bytes];
+        for (const [place, byte, kind] of changes) {
+          if (kind === "set") data[place] = byte;
+          else if (kind === "drop") data.splice(place, 3);
+          else data = [...data.slice(0, place), ...data.slice(Math.max(0, place - 20))];
+        }
+        sane(readMelodyFile(name, Uint8Array.from(data.map((each) => each ?? 0))));
+      }),
+      { numRuns: name === "a.abc" ? 100 : 700 },
+    );
+  });
+
+  test("random bytes and random notation", () => {
+    const sign = fc.constantFrom(
+      "C",
+      "d'",
+      "E,",
+      "|",
+      ":|",
+      "|:",
+      "|1",
+      "|2",
+      "(3",
+      "-",
+      "[CE]",
+      "{g}",
+      "^",
+      "_",
+      "z",
+      "/2",
+      "3",
+      "\n",
+      "V:2\n",
+      "K:G\n",
+      "w:la la\n",
+      '"Am"',
+      "!trill!",
+      "[K:D]",
+      "&",
+      "%x\n",
+      "M:3/4\n",
+      "<",
+      ">",
+    );
+    fc.assert(
+      fc.property(
+        fc.constantFrom("a.mid", "a.mxl", "a.xml", "a.abc"),
+        fc.uint8Array({ maxLength: 300 }),
+        (name, bytes) => {
+          sane(readMelodyFile(name, bytes));
+        },
+      ),
+      { numRuns: 800 },
+    );
+    fc.assert(
+      fc.property(fc.array(sign, { maxLength: 40 }), (signs) => {
+        sane(readMelodyFile("a.abc", strToU8(`X:1\nL:1/8\nK:C\n${signs.join("")}\n`)));
+      }),
+      { numRuns: 800 },
+    );
+  });
+});

@@ -1,0 +1,90 @@
+import fc from "fast-check";
+import { spellTonic, tonicPitchClass } from "../../shared/music/keyName";
+import { parseChart, printChart, transposeChart } from "../../shared/songs/chart";
+import { findKey, type KeyFinding } from "../../shared/songs/findKey";
+import { readMelodyFile } from "../../shared/songs/melodyFile";
+import type { MelodyNote } from "../../shared/songs/melody";
+import { type KnownSong, knownSongs } from "./traditionalTunes";
+
+function notesOf(song: KnownSong): MelodyNote[] {
+  if (!song.abc) return [];
+  const { meter, unit, notes } = song.abc;
+  const text = `X:1\nM:${meter}\nL:${unit}\nK:${song.key}\n${notes}\n`;
+  const file = readMelodyFile("tune.abc", new TextEncoder().encode(text));
+  if (!file.ok) throw new Error(`${song.name}: ${file.reason}`);
+  return file.voices[0]!.melody.notes;
+}
+/** The key is found from notes and chords alone; what the file states is not passed on. */
+const find = (song: KnownSong): KeyFinding =>
+  findKey(song.chords === undefined ? { notes: notesOf(song) } : { chart: parseChart(song.chords) })!;
+const label = ({ tonic, mode }: KeyFinding["key"]) => tonic + (mode === "minor" ? "m" : "");
+
+test("at least 85 of 100 known songs get exactly their key, and the others have it as runner-up", () => {
+  const wrong = knownSongs.filter((song) => label(find(song).key) !== song.key);
+  expect(knownSongs.length).toBeGreaterThanOrEqual(30);
+  expect(1 - wrong.length / knownSongs.length).toBeGreaterThanOrEqual(0.85);
+  expect(wrong.filter((song) => label(find(song).runnerUp) !== song.key)).toEqual([]);
+});
+
+test.each(knownSongs.map((song) => [song.name, song] as const))(
+  "%s is answered with words and a runner-up",
+  (_, song) => {
+    const { key, runnerUp, confidence, margin, reasons } = find(song);
+    expect(label(runnerUp)).not.toBe(label(key));
+    expect(margin).toBeGreaterThanOrEqual(0);
+    expect(confidence).toBeGreaterThan(1 / 24);
+    expect(confidence).toBeLessThanOrEqual(1);
+    expect(reasons.length).toBeGreaterThan(0);
+    for (const reason of reasons) expect(reason).toMatch(/^[A-Z][^#!]*\.$/);
+    expect(reasons.some((reason) => reason.startsWith("It could be "))).toBe(margin < 0.05);
+  },
+);
+
+test("moving a song moves its key, and nothing else", () => {
+  fc.assert(
+    fc.property(fc.constantFrom(...knownSongs), fc.integer({ min: 1, max: 11 }), (song, semitones) => {
+      const before = find(song);
+      const target = {
+        tonic: spellTonic((tonicPitchClass(before.key.tonic) + semitones) % 12, before.key.mode),
+        mode: before.key.mode,
+      };
+      const after =
+        song.chords === undefined
+          ? findKey({ notes: notesOf(song).map((note) => ({ ...note, midi: note.midi + semitones })) })!
+          : findKey({ chart: parseChart(printChart(transposeChart(parseChart(song.chords), before.key, target))) })!;
+      expect(after.key).toEqual(target);
+      expect(after.margin).toBeCloseTo(before.margin, 9);
+    }),
+    { numRuns: 60 },
+  );
+});
+
+test("a song that starts and ends on its home chord is told so in plain words", () => {
+  const { reasons } = findKey({ chart: parseChart("D G A D\nBm G A D") })!;
+  expect(reasons).toEqual([
+    "It starts and ends on D.",
+    "D, G and A are its first, fourth and fifth chords.",
+    "All its chords belong to D major.",
+  ]);
+});
+
+test("chords and tune together outweigh either: a tune that could be in two keys follows its chords", () => {
+  const notes = [67, 69, 71, 74, 76, 74, 71, 69].map((midi, start) => ({ start, duration: 1, midi }));
+  expect(findKey({ notes, chart: parseChart("Em Am B7 Em") })!.key).toEqual({ tonic: "E", mode: "minor" });
+  expect(findKey({ notes, chart: parseChart("G C D7 G") })!.key).toEqual({ tonic: "G", mode: "major" });
+});
+
+test("little to go by gives little confidence, and nothing gives no answer", () => {
+  const one = findKey({ chart: parseChart("G7") })!;
+  const many = findKey({ chart: parseChart("G C D7 G\nG C D7 G\nG C D7 G") })!;
+  expect(one.confidence).toBeLessThan(0.7);
+  expect(many.confidence).toBeGreaterThan(one.confidence);
+  expect(findKey({})).toBeNull();
+  expect(findKey({ chart: parseChart("only words"), notes: [] })).toBeNull();
+});
+
+test("the key is spelled as its chart spells it", () => {
+  expect(findKey({ chart: parseChart("Gb Cb Db7 Gb") })!.key.tonic).toBe("Gb");
+  expect(findKey({ chart: parseChart("F# B C#7 F#") })!.key.tonic).toBe("F#");
+  expect(findKey({ chart: parseChart("A# D# F7 A#") })!.key.tonic).toBe("Bb");
+});

@@ -1,0 +1,111 @@
+import type { KeyName } from "../../shared/music/keyName";
+import { type Chart, printChart, transposeChart } from "../../shared/songs/chart";
+import { findKey, type KeyEvidence, rankKeys } from "../../shared/songs/findKey";
+import type { Melody, MelodyNote } from "../../shared/songs/melody";
+import { tessitura, tessituragram } from "../../shared/songs/tessituragram";
+import { melodyFromRecording, type RecordedMelody } from "./recordedMelody";
+import { chartFromFile, isMelodyFile, isRecording, melodyFromFile } from "./songFile";
+import { BadInput, type Verb } from "./verb";
+import { readKey, readOptions, required } from "./verbOptions";
+
+/** How far behind the best key another may lie to be what somebody means who names its mode. */
+const likelyEnough = 0.15;
+
+/** The notes of a tune, its home note and where it lives. */
+export const melodyVerb: Verb = {
+  usage: "melody FILE…   (.mid .musicxml .xml .mxl .abc, or a recording)",
+  async run(args) {
+    const { rest: files } = readOptions(args, []);
+    return eachFile(files, melodyVerb, async (file) => {
+      const { notes, home, mode } = await melodyOf(file);
+      const { mean, sd, q1, median, q3, lowMidi, highMidi } = tessitura(notes)!;
+      return {
+        file,
+        notes,
+        home,
+        mode,
+        lowMidi,
+        highMidi,
+        tessituragram: tessituragram(notes),
+        mean,
+        sd,
+        q1,
+        median,
+        q3,
+      };
+    });
+  },
+};
+
+/** The key of charts and melody files. */
+export const keyVerb: Verb = {
+  usage: "key FILE…   (chart text, .mid .musicxml .xml .mxl .abc, or a recording)",
+  async run(args) {
+    const { rest: files } = readOptions(args, []);
+    return eachFile(files, keyVerb, async (file) => {
+      const { key, confidence, runnerUp, reasons } = findKey(await evidenceOf(file))!;
+      return { file, tonic: key.tonic, mode: key.mode, confidence, runnerUp, reasons };
+    });
+  },
+};
+
+/** A chart in another key. */
+export const transposeVerb: Verb = {
+  usage: "transpose FILE… --to KEY [--from KEY]   (chart text; KEY such as D, F#m or Bb)",
+  async run(args) {
+    const { values, rest: files } = readOptions(args, ["to", "from"]);
+    const target = readKey(required(values["to"], "to"), "to");
+    const source = values["from"] === undefined ? null : readKey(values["from"], "from");
+    return eachFile(files, transposeVerb, async (file) => {
+      const chart = await chartFromFile(file);
+      const from = source ?? writtenKey(chart, target);
+      if (from.mode === "major" && target.mode === "minor") {
+        throw new BadInput(`${file}: A song in ${keyLabel(from)} stays major when it is moved; name a major key.`);
+      }
+      const to: KeyName = { tonic: target.tonic, mode: from.mode };
+      return { file, from: keyLabel(from), to: keyLabel(to), text: printChart(transposeChart(chart, from, to)) };
+    });
+  },
+};
+
+async function eachFile(
+  files: readonly string[],
+  verb: Verb,
+  read: (file: string) => Promise<object>,
+): Promise<object[]> {
+  if (files.length === 0) throw new BadInput(`Name a file: ${verb.usage}`);
+  const lines: object[] = [];
+  for (const file of files) lines.push(await read(file));
+  return lines;
+}
+
+async function evidenceOf(file: string): Promise<KeyEvidence> {
+  if (isRecording(file)) return { notes: inTune(await melodyFromRecording(file)) };
+  if (!isMelodyFile(file)) return { chart: await chartFromFile(file) };
+  const { melody, stated } = await melodyFromFile(file);
+  return { notes: melody.notes, ...(stated ? { stated } : {}) };
+}
+
+async function melodyOf(file: string): Promise<Melody> {
+  if (!isRecording(file)) return (await melodyFromFile(file)).melody;
+  const recorded = await melodyFromRecording(file);
+  const key = findKey({ notes: inTune(recorded) })?.key;
+  return { notes: recorded.notes, home: key?.tonic ?? null, mode: key?.mode ?? null };
+}
+
+/** A singer who is evenly flat still sings in a key: name it from where their notes lie, not from the piano. */
+function inTune({ notes, tuningCents }: RecordedMelody): MelodyNote[] {
+  return notes.map((note) => ({ ...note, midi: note.midi - tuningCents / 100 }));
+}
+
+/** The key a chart is in; when the target is said to be minor, the likeliest minor one, if it is likely at all. */
+function writtenKey(chart: Chart, target: KeyName): KeyName {
+  const [best, ...others] = rankKeys({ chart });
+  const minor = others.find(({ key }) => key.mode === "minor");
+  const close = minor !== undefined && minor.score > best!.score - likelyEnough;
+  return target.mode === "minor" && close ? minor.key : best!.key;
+}
+
+function keyLabel({ tonic, mode }: KeyName): string {
+  return mode === "major" ? tonic : mode === "minor" ? `${tonic}m` : `${tonic} ${mode}`;
+}

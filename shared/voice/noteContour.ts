@@ -1,9 +1,11 @@
 /** Half a vibrato cycle of the slowest kind, in frames of 10 ms: a window of 2 x 8 + 1 frames holds one cycle of 6 Hz. */
 const HALF_CYCLE = 8;
+/** Where the windows stand against the frame; each holds the frame and stays inside the stretch. */
+const SHIFTS = [0, -HALF_CYCLE, HALF_CYCLE, -HALF_CYCLE / 2, HALF_CYCLE / 2];
 
 /**
  * Smooths a pitch contour so that vibrato gives way to its centre while steps stay sharp:
- * of three windows of one vibrato cycle (before, around and after the frame) the steadiest gives its mean.
+ * of five windows of one vibrato cycle (from before the frame to after it) the steadiest gives its mean.
  *
  * @param midi fractional MIDI numbers every 10 ms of one unbroken voiced stretch, shape [n]; not modified
  * @returns the smoothed contour, shape [n]
@@ -19,17 +21,15 @@ export function smoothContour(midi: readonly number[]): number[] {
     sums.push(sums[sums.length - 1]! + d);
     squares.push(squares[squares.length - 1]! + d * d);
   }
+  const size = Math.min(n, 2 * HALF_CYCLE + 1);
   return midi.map((_, i) => {
     let best = Infinity;
     let value = midi[i]!;
-    for (const shift of [0, -HALF_CYCLE, HALF_CYCLE, -HALF_CYCLE / 2, HALF_CYCLE / 2]) {
-      const from = Math.max(0, i + shift - HALF_CYCLE);
-      const to = Math.min(n, i + shift + HALF_CYCLE + 1);
-      const count = to - from;
-      if (count < Math.min(n, HALF_CYCLE)) continue;
-      const mean = (sums[to]! - sums[from]!) / count;
-      const spread = (squares[to]! - squares[from]!) / count - mean * mean + 0.3 / count;
-      if (spread < best - 1e-12) {
+    for (const shift of SHIFTS) {
+      const from = Math.max(0, Math.min(n - size, i + shift - HALF_CYCLE));
+      const mean = (sums[from + size]! - sums[from]!) / size;
+      const spread = (squares[from + size]! - squares[from]!) / size - mean * mean;
+      if (spread < best - 1e-9) {
         best = spread;
         value = origin + mean;
       }

@@ -52,14 +52,16 @@ export function findSigns(frames: readonly TrackFrame[], notes: readonly HeardNo
   };
 }
 
-/** Speech glides within its syllables, leaves much of its voice unsteady, holds nothing long and keeps to no scale. */
+/** Speech glides within its syllables, leaves much of its voice unsteady, holds nothing long, keeps to no scale and moves in a narrow band. */
 function likenessToSpeech(frames: readonly TrackFrame[], clear: readonly HeardNote[], heldS: number): number {
   const voicedS = frames.filter((f) => f.hz !== null).length / 100;
   const share = Math.min(1, heldS / Math.max(0.01, voicedS));
   const longShare = Math.min(1, clear.filter((n) => n.heldS >= 0.4).reduce((sum, n) => sum + n.heldS, 0) / Math.max(0.01, voicedS));
   const longest = Math.max(...clear.map((n) => n.heldS));
+  const midi = frames.flatMap((f) => (f.hz === null ? [] : [12 * Math.log2(f.hz)])).sort((a, b) => a - b);
+  const span = midi[Math.floor(midi.length * 0.95)]! - midi[Math.floor(midi.length * 0.05)]!;
   const glide = median(clear.map((n) => Math.abs(glideWithin(frames, n))));
-  return glide / 150 + 4 * (1 - share) + 2 * (0.5 - longShare) - (gridFit(clear) - 0.3) - 1.5 * Math.max(0, longest - 0.6);
+  return glide / 150 + 4 * (1 - share) + 2 * (0.5 - longShare) - (gridFit(clear) - 0.3) - 1.5 * Math.max(0, longest - 0.6) - 0.12 * Math.max(-3, Math.min(6, span - 6));
 }
 
 /** How well the notes keep to one grid of semitones, whatever its offset: 0 at random to 1 exactly. */

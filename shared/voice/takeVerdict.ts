@@ -11,7 +11,7 @@ const QUIET_DB = -60;
 const FAINT_DB = -42;
 const MIXED_AT_MOST = 0.35;
 const VOICED_AT_LEAST = 0.4;
-const SPEECH_FROM = 1.3;
+const SPEECH_FROM = 1.2;
 const CLIPPED_BEYOND_USE = 0.05;
 
 /** Everything a verdict is made from. */

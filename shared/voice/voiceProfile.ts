@@ -35,11 +35,13 @@ export const MOST_BY_ONE_TAKE = 4;
 /** A take loses half its weight in this many days against the newest one. */
 export const HALF_LIFE_DAYS = 180;
 const TRUSTED = 0.6;
+/** A trusted guided hold decides an end of the range against phrases that went at most this much farther, in semitones. */
+export const HOLD_WINS_WITHIN = 2;
 
 /**
  * Merges the takes of one voice by evidence and age. The outermost believed notes make the range; an end shown by one
  * take only moves at most 4 semitones beyond what the others show, unless that take was a guided hold heard with a
- * certainty of 0.6 or more. Comfort is the weighted mean of the takes' bands (certainty, age, and ease where it was
+ * certainty of 0.6 or more. Such a hold also decides an end against phrases that went up to 2 semitones farther. Comfort is the weighted mean of the takes' bands (certainty, age, and ease where it was
  * rated: easy singing counts up to twice, straining singing not at its ends), kept inside the range.
  * A function of the set of takes only: order does not matter, and leaving a take out gives what was before it.
  *
@@ -52,8 +54,7 @@ export function mergeTakes(takes: readonly ProfileTake[]): VoiceProfile | null {
   const sorted = [...takes].sort((a, b) => (a.id < b.id ? -1 : a.id > b.id ? 1 : 0));
   const newest = Math.max(...sorted.map(timeOf));
   const weighed = sorted.map((take) => ({ take, weight: weightOf(take, newest) }));
-  const low = outerEnd(sorted, (t) => t.range.lowMidi, -1);
-  const high = outerEnd(sorted, (t) => t.range.highMidi, 1);
+  const [low, high] = bothEnds(sorted);
   const range = { lowMidi: low.midi, highMidi: high.midi };
   const comfort = within(range, {
     lowMidi: weightedMean(weighed, easyLow),
@@ -83,13 +84,22 @@ interface End {
   capped: boolean;
 }
 
+/** Two takes far apart would each cap the other past the middle; then both count whole. */
+function bothEnds(takes: readonly ProfileTake[]): [End, End] {
+  const ends = (most: number): [End, End] => [outerEnd(takes, (t) => t.range.lowMidi, -1, most), outerEnd(takes, (t) => t.range.highMidi, 1, most)];
+  const capped = ends(MOST_BY_ONE_TAKE);
+  return capped[0].midi <= capped[1].midi ? capped : ends(Infinity);
+}
+
 /** @param side -1 for the low end, 1 for the high end */
-function outerEnd(takes: readonly ProfileTake[], midiOf: (take: ProfileTake) => number, side: -1 | 1): End {
+function outerEnd(takes: readonly ProfileTake[], midiOf: (take: ProfileTake) => number, side: -1 | 1, most: number): End {
   const outward = [...takes].sort((a, b) => side * (midiOf(b) - midiOf(a)) || (a.id < b.id ? -1 : 1));
   const first = outward[0]!;
   const second = outward[1];
+  const hold = outward.find((t) => t.hold === true && t.certainty >= TRUSTED);
+  if (hold && hold !== first && side * (midiOf(first) - midiOf(hold)) <= HOLD_WINS_WITHIN) return { midi: midiOf(hold), id: hold.id, held: true, capped: false };
   const sure = first.hold === true && first.certainty >= TRUSTED;
-  const limit = second === undefined || sure ? Infinity : side * midiOf(second) + MOST_BY_ONE_TAKE;
+  const limit = second === undefined || sure ? Infinity : side * midiOf(second) + most;
   const capped = side * midiOf(first) > limit;
   return { midi: capped ? side * limit : midiOf(first), id: first.id, held: first.hold === true, capped };
 }

@@ -1,0 +1,119 @@
+import fc from "fast-check";
+import { createLiveTracker, LOOK_AHEAD_FRAMES, type LiveFrame } from "@/shared/voice/liveTracker";
+import { listenToTake } from "@/shared/voice/listenToTake";
+import { singPhrase } from "../sound/singer";
+import { phraseFor } from "./voiceSingers";
+
+const rate = 44100;
+const alto = singPhrase({ ...phraseFor("alto", 5), noiseSnrDb: 30 });
+const report = listenToTake(alto.pcm, rate);
+
+test.each([-20, 20])("a gain of %i dB changes nothing but the levels", (gain) => {
+  const louder = listenToTake(alto.pcm.map((x) => x * 10 ** (gain / 20)), rate);
+  expect(louder.verdict).toBe(report.verdict);
+  expect(louder.range!.lowMidi).toBeCloseTo(report.range!.lowMidi, 2);
+  expect(louder.range!.highMidi).toBeCloseTo(report.range!.highMidi, 2);
+  expect(louder.notes).toHaveLength(report.notes.length);
+  louder.notes.forEach((note, k) => {
+    expect(note.midi).toBeCloseTo(report.notes[k]!.midi, 2);
+    expect(note.levelDb - report.notes[k]!.levelDb).toBeCloseTo(gain, 1);
+  });
+});
+
+test("silence before the singing only shifts the times", () => {
+  fc.assert(
+    fc.property(fc.integer({ min: 1, max: 120 }), (hundredths) => {
+      const clean = singPhrase(phraseFor("tenor", 2));
+      const later = new Float32Array(hundredths * 441 + clean.pcm.length);
+      later.set(clean.pcm, hundredths * 441);
+      const [now, then] = [listenToTake(clean.pcm, rate), listenToTake(later, rate)];
+      expect(then.notes).toHaveLength(now.notes.length);
+      then.notes.forEach((note, k) => {
+        expect(note.start - now.notes[k]!.start).toBeCloseTo(hundredths / 100, 6);
+        expect(note.midi).toBeCloseTo(now.notes[k]!.midi, 2);
+      });
+      expect(then.range!.lowMidi).toBeCloseTo(now.range!.lowMidi, 2);
+    }),
+    { numRuns: 4, seed: 11 },
+  );
+});
+
+test("the sample rate of the microphone does not matter: within 10 cents at 16, 44.1 and 48 kHz", () => {
+  const ranges = [16000, 44100, 48000, 96000].map((sampleRate) => listenToTake(singPhrase({ ...phraseFor("bass", 4), sampleRate, consonants: 0 }).pcm, sampleRate).range!);
+  for (const range of ranges) {
+    expect(Math.abs(range.lowMidi - ranges[0]!.lowMidi)).toBeLessThanOrEqual(0.1);
+    expect(Math.abs(range.highMidi - ranges[0]!.highMidi)).toBeLessThanOrEqual(0.1);
+  }
+});
+
+test("another reference pitch only renames: A4 = 432 Hz puts every note 31.8 cents higher", () => {
+  const renamed = listenToTake(alto.pcm, rate, { a4: 432 });
+  expect(renamed.range!.lowMidi - report.range!.lowMidi).toBeCloseTo(0.3177, 3);
+});
+
+test("a singer who is flat throughout keeps the notes' names, and the offset is told", () => {
+  const notes = [57, 59, 61, 62, 64, 62, 61, 57].map((midi) => ({ midi: midi - 0.35, durationS: 0.5 }));
+  const { pcm } = singPhrase({ notes, seed: 8 });
+  const flat = listenToTake(pcm, rate);
+  expect(flat.tuningCents).toBeGreaterThan(-45);
+  expect(flat.tuningCents).toBeLessThan(-25);
+  expect(flat.sentence).toBe("You sang from A3 to E4.");
+});
+
+test("vibrato is told with its rate and extent, and the note is its centre", () => {
+  const { pcm } = singPhrase({ notes: [{ midi: 60, durationS: 1.6 }, { midi: 64, durationS: 1.6 }], vibrato: { rateHz: 5.7, extentCents: 80 }, seed: 6, consonants: 0 });
+  const long = listenToTake(pcm, rate).notes.filter((n) => n.end - n.start > 1);
+  expect(long).toHaveLength(2);
+  for (const [k, note] of long.entries()) {
+    expect(Math.abs(note.midi - [60, 64][k]!)).toBeLessThan(0.15);
+    expect(note.vibrato!.rateHz).toBeCloseTo(5.7, 0);
+    expect(note.vibrato!.extentCents).toBeGreaterThan(50);
+    expect(note.vibrato!.extentCents).toBeLessThan(110);
+  }
+});
+
+test("what is said holds together: comfort in range, estimate around it, quantiles in order", () => {
+  const { range, comfort, estimate, tessitura, certainty } = report;
+  const chain = [estimate!.lowMidi, range!.lowMidi, comfort!.lowMidi, comfort!.highMidi, range!.highMidi, estimate!.highMidi];
+  expect([...chain].sort((a, b) => a - b)).toEqual(chain);
+  const { p5, q1, median, q3, p95 } = tessitura!;
+  expect([p5, q1, median, q3, p95].sort((a, b) => a - b)).toEqual([p5, q1, median, q3, p95]);
+  expect(certainty).toBeGreaterThan(0.4);
+  expect(certainty).toBeLessThan(1);
+});
+
+function live(pcm: Float32Array, pieces: number): LiveFrame[] {
+  const tracker = createLiveTracker(rate);
+  const out: LiveFrame[] = [];
+  for (let from = 0; from < pcm.length; from += pieces) out.push(...tracker.push(pcm.subarray(from, from + pieces)));
+  return out;
+}
+
+test("live and afterwards agree, but for the look-ahead", () => {
+  const frames = live(alto.pcm, 1024);
+  expect(report.f0.length - frames.length).toBeLessThanOrEqual(LOOK_AHEAD_FRAMES + 5);
+  frames.forEach(({ t }, k) => expect(t).toBeCloseTo(k / 100, 9));
+  const both = frames.filter(({ hz }, k) => hz !== null && report.f0[k] !== null);
+  const near = frames.filter(({ hz }, k) => hz !== null && report.f0[k] != null && Math.abs(1200 * Math.log2(hz / report.f0[k]!)) < 20);
+  const voiced = report.f0.slice(0, frames.length).filter((hz) => hz !== null).length;
+  expect(near.length / both.length).toBeGreaterThan(0.995);
+  expect(both.length / voiced).toBeGreaterThan(0.97);
+});
+
+test("the sizes of the pieces do not matter to the live tracker", () => {
+  const start = alto.pcm.subarray(0, 60000);
+  const expected = live(start, 441);
+  fc.assert(
+    fc.property(fc.integer({ min: 64, max: 9000 }), (pieces) => {
+      expect(live(start, pieces)).toEqual(expected.slice(0, live(start, pieces).length));
+    }),
+    { numRuns: 4, seed: 12 },
+  );
+});
+
+test("the tracker keeps far ahead of real time", () => {
+  const started = process.cpuUsage().user;
+  for (let k = 0; k < 3; k++) listenToTake(alto.pcm, rate);
+  const cpuS = (process.cpuUsage().user - started) / 1e6;
+  expect((3 * alto.pcm.length) / rate / cpuS).toBeGreaterThan(10);
+});

@@ -1,0 +1,82 @@
+import { listenToTake } from "@/shared/voice/listenToTake";
+import * as sounds from "../sound/noSinging";
+import { singPhrase } from "../sound/singer";
+import { phraseFor, singers, type SingerName } from "./voiceSingers";
+
+const nothing: [string, sounds.SoundMaker, string[]][] = [
+  ["silence", sounds.silence, ["too-quiet"]],
+  ["a quiet room", sounds.roomTone, ["too-quiet", "too-noisy", "not-singing"]],
+  ["a fan", sounds.fanNoise, ["too-noisy", "not-singing"]],
+  ["mains hum", sounds.mainsHum, ["too-noisy", "not-singing"]],
+  ["claps", sounds.claps, ["not-singing"]],
+  ["typing", sounds.typing, ["not-singing"]],
+  ["whistling", sounds.whistle, ["not-singing"]],
+  ["strummed strings", sounds.strummedStrings, ["not-singing", "several-voices"]],
+];
+
+test.each(nothing)("%s gives no numbers, but a sentence and a next step", (_, make, verdicts) => {
+  for (const seed of [1, 2]) {
+    const report = listenToTake(make(seed), 44100);
+    expect(verdicts).toContain(report.verdict);
+    expect([report.range, report.comfort, report.estimate, report.tessitura, report.certainty]).toEqual([null, null, null, null, 0]);
+    expect(report.sentence).toMatch(/\.$/);
+    expect(report.nextStep).toMatch(/\.$/);
+  }
+});
+
+const lines = [
+  "The half past nine boat was late again, so we sat on the wall and ate the sandwiches before anybody noticed.",
+  "Please leave the key under the second flower pot and tell your sister that the kettle is broken.",
+];
+test.each(["en", "en+f3", "de", "en+m3", "fr+f2"])("speech is not taken for singing (espeak-ng voice %s)", (voice) => {
+  for (const line of lines) {
+    const spoken = sounds.speech(line, voice);
+    if (spoken === null) expect(spoken).toBeNull();
+    else expect(listenToTake(spoken.pcm, spoken.sampleRate).verdict).toBe("not-singing");
+  }
+});
+
+test("singing in all its kinds is not refused", () => {
+  for (const name of Object.keys(singers) as SingerName[]) {
+    for (const more of [{}, { breathDb: -22 }, { jitter: 0.012, shimmer: 0.1 }, { gainDb: -30, noiseSnrDb: 25 }]) {
+      const { pcm, sampleRate } = singPhrase({ ...phraseFor(name, 9), ...more });
+      expect([name, more, listenToTake(pcm, sampleRate).verdict]).toEqual([name, more, "heard"]);
+    }
+  }
+});
+
+test("one short note is too short", () => {
+  const { pcm, sampleRate } = singPhrase({ notes: [{ midi: 57, durationS: 0.5 }], seed: 2 });
+  expect(listenToTake(pcm, sampleRate).verdict).toBe("too-short");
+});
+
+test("a whisper of a signal is too quiet", () => {
+  const { pcm, sampleRate } = singPhrase({ ...phraseFor("alto", 3), gainDb: -62 });
+  expect(listenToTake(pcm, sampleRate).verdict).toBe("too-quiet");
+});
+
+test("two people singing in thirds are several voices", () => {
+  const sing = (steps: number[], seed: number, tract: number) =>
+    singPhrase({ notes: steps.map((midi) => ({ midi, durationS: 0.6 })), seed, tract, consonants: 0 });
+  const upper = sing([60, 62, 64, 65, 67, 65, 64, 62, 60, 64], 3, 1.15);
+  const lower = sing([57, 59, 60, 62, 64, 62, 60, 59, 57, 60], 12, 1);
+  const together = upper.pcm.map((x, i) => 0.5 * x + 0.4 * (lower.pcm[i] ?? 0));
+  expect(listenToTake(together, upper.sampleRate).verdict).toBe("several-voices");
+});
+
+test("a guided hold of one note is heard", () => {
+  const { pcm, sampleRate } = singPhrase({ notes: [{ midi: 45, durationS: 1.5 }], seed: 4 });
+  const report = listenToTake(pcm, sampleRate, { hold: true });
+  expect(report.verdict).toBe("heard");
+  expect(report.range!.lowMidi).toBeCloseTo(45, 0);
+  expect(report.range!.highMidi - report.range!.lowMidi).toBeLessThan(0.5);
+});
+
+test("a rate or a reference pitch that cannot be is the caller's mistake", () => {
+  expect(() => listenToTake(new Float32Array(10), 100)).toThrow(RangeError);
+  expect(() => listenToTake(new Float32Array(10), 44100, { a4: 0 })).toThrow(RangeError);
+});
+
+test("no sound at all is a report, not an error", () => {
+  expect(listenToTake(new Float32Array(0), 44100)).toMatchObject({ verdict: "too-quiet", durationS: 0, f0: [], notes: [] });
+});

@@ -46,7 +46,7 @@ export function BeforeSinging({ asking, onSing }: BeforeSingingProps) {
 }
 
 /** How to sing without harm, and whose advice the four weeks are. */
-export function Cautions() {
+function Cautions() {
   return (
     <Notice kind="caution" title="Sing at your ease">
       <Text variant="small">Stop if it hurts, tickles or turns hoarse.</Text>

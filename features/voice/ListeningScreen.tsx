@@ -145,6 +145,7 @@ function TimeRow({ seconds }: { seconds: number }) {
 
 /** It has the focus while listening, so that Space or Enter ends the take. */
 function StopButton({ stopping, onStop }: { stopping: boolean; onStop: () => void }) {
+  const phone = useLayout() === "phone";
   const button = useRef<View>(null);
   useEffect(() => button.current?.focus(), []);
   return (
@@ -156,7 +157,7 @@ function StopButton({ stopping, onStop }: { stopping: boolean; onStop: () => voi
       testID="sing-stop"
       style={{
         height: 64,
-        borderRadius: sizes.radius,
+        borderRadius: phone ? sizes.radius : 999,
         backgroundColor: colors.plum,
         flexDirection: "row",
         alignItems: "center",

@@ -13,8 +13,8 @@ export type ByHandErrors = Partial<Record<keyof ByHandFields, string>>;
 export type ByHandReading = { ok: true; voice: SingingVoice } | { ok: false; errors: ByHandErrors };
 
 /** No human voice is sought outside of these: C1 to C7. */
-export const lowestNote = 24;
-export const highestNote = 96;
+const lowestNote = 24;
+const highestNote = 96;
 /** Common practice: one to two semitones in reserve at the bottom, two to three at the top. */
 const reserves = { low: 2, high: 3 };
 /** A range this narrow has nothing to spare for a reserve. */

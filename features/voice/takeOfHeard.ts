@@ -30,15 +30,13 @@ export function takeOfHeard(heard: HeardTake, voiceId: string): Take {
     tuningCents: report.tuningCents,
     certainty: report.certainty,
     reasons: report.reasons.slice(0, 20).map((reason) => reason.slice(0, 300)),
-    notes: report.notes
-      .slice(0, 2000)
-      .map(({ start, end, midi, steadinessCents, sustained, clear }) => ({
-        start,
-        end,
-        midi,
-        steadinessCents,
-        sustained,
-        clear,
-      })),
+    notes: report.notes.slice(0, 2000).map(({ start, end, midi, steadinessCents, sustained, clear }) => ({
+      start,
+      end,
+      midi,
+      steadinessCents,
+      sustained,
+      clear,
+    })),
   };
 }

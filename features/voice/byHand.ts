@@ -9,7 +9,7 @@ export interface ByHandFields {
   comfortLow: string;
   comfortTop: string;
 }
-export type ByHandErrors = Partial<Record<keyof ByHandFields, string>>;
+type ByHandErrors = Partial<Record<keyof ByHandFields, string>>;
 export type ByHandReading = { ok: true; voice: SingingVoice } | { ok: false; errors: ByHandErrors };
 
 /** No human voice is sought outside of these: C1 to C7. */

@@ -4,7 +4,7 @@ import { listenToTake } from "@/shared/voice/listenToTake";
 import { singPhrase } from "../sound/singer";
 import { phraseFor } from "./voiceSingers";
 
-const rate = 44100;
+const rate = 16000;
 const alto = singPhrase({ ...phraseFor("alto", 5), noiseSnrDb: 30 });
 const report = listenToTake(alto.pcm, rate);
 
@@ -24,8 +24,8 @@ test("silence before the singing only shifts the times", () => {
   fc.assert(
     fc.property(fc.integer({ min: 1, max: 120 }), (hundredths) => {
       const clean = singPhrase(phraseFor("tenor", 2));
-      const later = new Float32Array(hundredths * 441 + clean.pcm.length);
-      later.set(clean.pcm, hundredths * 441);
+      const later = new Float32Array(hundredths * 160 + clean.pcm.length);
+      later.set(clean.pcm, hundredths * 160);
       const [now, then] = [listenToTake(clean.pcm, rate), listenToTake(later, rate)];
       expect(then.notes).toHaveLength(now.notes.length);
       then.notes.forEach((note, k) => {
@@ -39,7 +39,7 @@ test("silence before the singing only shifts the times", () => {
 });
 
 test("the sample rate of the microphone does not matter: within 10 cents at 16, 44.1 and 48 kHz", () => {
-  const ranges = [16000, 44100, 48000, 96000].map((sampleRate) => listenToTake(singPhrase({ ...phraseFor("bass", 4), sampleRate, consonants: 0 }).pcm, sampleRate).range!);
+  const ranges = [16000, 44100, 48000].map((sampleRate) => listenToTake(singPhrase({ ...phraseFor("bass", 4), sampleRate, consonants: 0 }).pcm, sampleRate).range!);
   for (const range of ranges) {
     expect(Math.abs(range.lowMidi - ranges[0]!.lowMidi)).toBeLessThanOrEqual(0.1);
     expect(Math.abs(range.highMidi - ranges[0]!.highMidi)).toBeLessThanOrEqual(0.1);
@@ -53,7 +53,7 @@ test("another reference pitch only renames: A4 = 432 Hz puts every note 31.8 cen
 
 test("a singer who is flat throughout keeps the notes' names, and the offset is told", () => {
   const notes = [57, 59, 61, 62, 64, 62, 61, 57].map((midi) => ({ midi: midi - 0.35, durationS: 0.5 }));
-  const { pcm } = singPhrase({ notes, seed: 8 });
+  const { pcm } = singPhrase({ notes, seed: 8, sampleRate: rate });
   const flat = listenToTake(pcm, rate);
   expect(flat.tuningCents).toBeGreaterThan(-45);
   expect(flat.tuningCents).toBeLessThan(-25);
@@ -61,7 +61,7 @@ test("a singer who is flat throughout keeps the notes' names, and the offset is 
 });
 
 test("vibrato is told with its rate and extent, and the note is its centre", () => {
-  const { pcm } = singPhrase({ notes: [{ midi: 60, durationS: 1.6 }, { midi: 64, durationS: 1.6 }], vibrato: { rateHz: 5.7, extentCents: 80 }, seed: 6, consonants: 0 });
+  const { pcm } = singPhrase({ notes: [{ midi: 60, durationS: 1.6 }, { midi: 64, durationS: 1.6 }], vibrato: { rateHz: 5.7, extentCents: 80 }, seed: 6, consonants: 0, sampleRate: rate });
   const long = listenToTake(pcm, rate).notes.filter((n) => n.end - n.start > 1);
   expect(long).toHaveLength(2);
   for (const [k, note] of long.entries()) {
@@ -101,10 +101,10 @@ test("live and afterwards agree, but for the look-ahead", () => {
 });
 
 test("the sizes of the pieces do not matter to the live tracker", () => {
-  const start = alto.pcm.subarray(0, 60000);
-  const expected = live(start, 441);
+  const start = alto.pcm.subarray(0, 24000);
+  const expected = live(start, 160);
   fc.assert(
-    fc.property(fc.integer({ min: 64, max: 9000 }), (pieces) => {
+    fc.property(fc.integer({ min: 64, max: 4000 }), (pieces) => {
       expect(live(start, pieces)).toEqual(expected.slice(0, live(start, pieces).length));
     }),
     { numRuns: 4, seed: 12 },

@@ -15,7 +15,7 @@ const conditions: Record<string, Partial<PhraseOptions>> = {
   scoops: { scoopCents: 250 },
   "echo and everyday noise": { thinMicHz: 180, noiseSnrDb: 20, reverb: 0.25, vibrato: { rateHz: 5.5, extentCents: 35 } },
   "clipped": { gainDb: 16 },
-  "guitar at -20 dB": { underneath: { pcm: strummedStrings(3, 44100, 9), levelDb: -20 }, noiseSnrDb: 35 },
+  "guitar at -20 dB": { underneath: { pcm: strummedStrings(3, 16000, 9), levelDb: -20 }, noiseSnrDb: 35 },
 };
 
 /** Frames well inside a note: within 50 cents, and off by whole octaves (or a twelfth down). */

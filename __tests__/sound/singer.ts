@@ -2,6 +2,9 @@ import { createRandom, type Random } from "./random";
 import { addRoom, rms, type RoomOptions } from "./room";
 import { createVocalTract, type Vowel } from "./vocalTract";
 
+/** Taken out once: inside a test runner every use of a global is slow. */
+const { abs, max, min, PI, sin } = Math;
+
 export interface PhraseNote {
   /** fractional MIDI number of the note's centre */
   midi: number;
@@ -69,8 +72,8 @@ export function singPhrase(options: PhraseOptions): { pcm: Float32Array; truth: 
   }
   const truth = {
     notes: sounding.map(({ start, end, midi }) => ({ start, end, midi })),
-    lowestMidi: Math.min(...notes.map((n) => n.midi)),
-    highestMidi: Math.max(...notes.map((n) => n.midi)),
+    lowestMidi: min(...notes.map((n) => n.midi)),
+    highestMidi: max(...notes.map((n) => n.midi)),
     f0,
   };
   return { pcm, truth, sampleRate };
@@ -91,7 +94,7 @@ function layNotes(notes: PhraseNote[], padS: number, consonants: number, random:
   return notes.map((note) => {
     const spoken = random.next() < consonants;
     const gap = note.gapS ?? (spoken ? random.between(0.04, 0.09) : 0);
-    const start = at + Math.min(gap, note.durationS / 2);
+    const start = at + min(gap, note.durationS / 2);
     const consonantFrom = spoken && gap > 0 ? at : null;
     at += note.durationS;
     return { ...note, start, end: at, consonantFrom };
@@ -101,7 +104,7 @@ function layNotes(notes: PhraseNote[], padS: number, consonants: number, random:
 function pitchCurve(sounding: Sounding[], options: PhraseOptions, random: Random, durationS: number): (t: number) => number {
   const { vibrato, scoopCents = 0 } = options;
   const drift = Array.from({ length: Math.ceil(durationS * 10) + 2 }, () => 0.05 * random.normal());
-  const phase = random.between(0, 2 * Math.PI);
+  const phase = random.between(0, 2 * PI);
   return (t) => {
     let index = 0;
     while (index + 1 < sounding.length && t >= sounding[index + 1]!.start) index++;
@@ -111,16 +114,16 @@ function pitchCurve(sounding: Sounding[], options: PhraseOptions, random: Random
     let midi = note.midi;
     if (before && before.end >= note.start - 1e-6 && since < 0.06) midi = before.midi + (note.midi - before.midi) * ease(since / 0.06);
     else if (scoopCents > 0 && since < 0.08) midi -= (scoopCents / 100) * (1 - ease(since / 0.08));
-    const slot = Math.max(0, t * 10);
+    const slot = max(0, t * 10);
     const whole = Math.floor(slot);
     midi += (drift[whole] ?? 0) + ((drift[whole + 1] ?? 0) - (drift[whole] ?? 0)) * (slot - whole);
-    if (vibrato) midi += (vibrato.extentCents / 100) * Math.min(1, Math.max(0, since - 0.1) / 0.2) * Math.sin(2 * Math.PI * vibrato.rateHz * t + phase);
+    if (vibrato) midi += (vibrato.extentCents / 100) * min(1, max(0, since - 0.1) / 0.2) * sin(2 * PI * vibrato.rateHz * t + phase);
     return midi;
   };
 }
 
 function ease(x: number): number {
-  const c = Math.max(0, Math.min(1, x));
+  const c = max(0, min(1, x));
   return c * c * (3 - 2 * c);
 }
 
@@ -128,7 +131,7 @@ function soundVoice(sounding: Sounding[], pitch: (t: number) => number, options:
   const { vowels = ["a", "e", "i", "o", "u"], tract = 1, breathDb = -32, jitter = 0.004, shimmer = 0.03, tiltHz = 2500 } = options;
   const filter = createVocalTract(rate, tract);
   const out = new Float32Array(length);
-  const tilt = Math.exp((-2 * Math.PI * tiltHz) / rate);
+  const tilt = Math.exp((-2 * PI * tiltHz) / rate);
   const breath = 10 ** (breathDb / 20);
   let phase = 0;
   let stretch = 1;
@@ -164,16 +167,16 @@ function soundVoice(sounding: Sounding[], pitch: (t: number) => number, options:
   }
   evenOut(out, sounding, rate);
   let peak = 1e-9;
-  for (const x of out) peak = Math.max(peak, Math.abs(x));
+  for (const x of out) peak = max(peak, abs(x));
   return out.map((x) => (0.4 * x) / peak);
 }
 
 /** Singers keep their notes about equally loud, whatever a formant does to one pitch: most of the difference is taken out. */
 function evenOut(pcm: Float32Array, sounding: Sounding[], rate: number): void {
-  const spans = sounding.map((n) => [Math.round(n.start * rate), Math.min(pcm.length, Math.round(n.end * rate))] as const);
+  const spans = sounding.map((n) => [Math.round(n.start * rate), min(pcm.length, Math.round(n.end * rate))] as const);
   const levels = spans.map(([from, to], k) => rms(pcm.subarray(from, to)) / 10 ** ((sounding[k]!.levelDb ?? 0) / 20));
   const mean = levels.reduce((sum, x) => sum + x, 0) / levels.length;
-  const gains = levels.map((x) => (mean / Math.max(1e-12, x)) ** 0.75);
+  const gains = levels.map((x) => (mean / max(1e-12, x)) ** 0.75);
   const blend = 0.04 * rate;
   spans.forEach(([from], k) => {
     const to = spans[k + 1]?.[0] ?? pcm.length;
@@ -188,7 +191,7 @@ function glottalFlow(phase: number, step: number): number {
   const p = phase / open;
   let value = phase < open ? 2 * p - 3 * p * p : 0;
   const toClose = phase - open;
-  if (Math.abs(toClose) < step) {
+  if (abs(toClose) < step) {
     const x = toClose / step;
     value += x < 0 ? 0.5 * (x + 1) ** 2 : -0.5 * (1 - x) ** 2;
   }

@@ -1,3 +1,6 @@
+/** Taken out once: inside a test runner every use of a global is slow. */
+const { cos, exp, max, min, PI } = Math;
+
 export type Vowel = "a" | "e" | "i" | "o" | "u";
 
 /** Five formants of an adult man's vowels, in Hz, rounded from common tables of sung vowels (common practice). */
@@ -28,11 +31,11 @@ export function createVocalTract(rate: number, scale: number): VocalTract {
     setVowel(vowel, glide, hz) {
       for (let k = 0; k < 5; k++) {
         const wanted = FORMANTS[vowel][k]! * scale;
-        const goal = k === 0 ? Math.max(wanted, hz * 1.02) : wanted;
+        const goal = k === 0 ? max(wanted, hz * 1.02) : wanted;
         now[k]! += (goal - now[k]!) * glide;
-        const r = Math.exp((-Math.PI * BANDWIDTHS[k]! * scale) / rate);
+        const r = exp((-PI * BANDWIDTHS[k]! * scale) / rate);
         c[k] = -r * r;
-        b[k] = 2 * r * Math.cos((2 * Math.PI * Math.min(now[k]!, 0.45 * rate)) / rate);
+        b[k] = 2 * r * cos((2 * PI * min(now[k]!, 0.45 * rate)) / rate);
         a[k] = 1 - b[k]! - c[k]!;
       }
     },

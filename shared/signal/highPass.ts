@@ -14,11 +14,17 @@ export function createHighPass(hz: number, rate: number): (pcm: Float32Array) =>
   const norm = 1 / (1 + Math.SQRT2 * w + w * w);
   const b1 = 2 * (w * w - 1) * norm;
   const b2 = (1 - Math.SQRT2 * w + w * w) * norm;
-  let [x1, x2, y1, y2] = [0, 0, 0, 0];
+  let x1 = 0;
+  let x2 = 0;
+  let y1 = 0;
+  let y2 = 0;
   return (pcm) =>
     pcm.map((x) => {
       const y = norm * (x - 2 * x1 + x2) - b1 * y1 - b2 * y2;
-      [x2, x1, y2, y1] = [x1, x, y1, Math.abs(y) < 1e-15 ? 0 : y];
+      x2 = x1;
+      x1 = x;
+      y2 = y1;
+      y1 = y < 1e-15 && y > -1e-15 ? 0 : y;
       return y;
     });
 }

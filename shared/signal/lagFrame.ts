@@ -50,7 +50,7 @@ export function createLagMeter(length = WINDOW): (samples: Float32Array, from: n
       for (let lag = 0; lag <= lastLag; lag++) {
         if (lag > 0) both -= window[lag - 1]! ** 2 + window[length - lag]! ** 2;
         r[lag] = correlation[lag]!;
-        m[lag] = Math.max(0, both);
+        m[lag] = both > 0 ? both : 0;
       }
     }
     let middle = 0;

@@ -25,14 +25,19 @@ export function levelDbfs(pcm: Float32Array, from = 0, to = pcm.length): number 
  * @example clippedShare(Float32Array.of(0, 1, 1, 1)) // => 0.75
  */
 export function clippedShare(pcm: Float32Array): number {
-  let peak = 0;
-  for (const x of pcm) peak = Math.max(peak, Math.abs(x));
-  if (peak === 0) return 0;
-  const ceiling = peak * 0.995;
+  let top = 0;
+  let bottom = 0;
+  for (let i = 0; i < pcm.length; i++) {
+    const x = pcm[i]!;
+    if (x > top) top = x;
+    else if (x < bottom) bottom = x;
+  }
+  if (top === bottom) return 0;
+  const ceiling = (top > -bottom ? top : -bottom) * 0.995;
   let clipped = 0;
   let run = 0;
   for (let i = 0; i <= pcm.length; i++) {
-    if (i < pcm.length && Math.abs(pcm[i]!) >= ceiling) run++;
+    if (i < pcm.length && (pcm[i]! >= ceiling || pcm[i]! <= -ceiling)) run++;
     else {
       if (run >= 3) clipped += run;
       run = 0;

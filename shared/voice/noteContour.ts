@@ -65,7 +65,7 @@ export function cutContour(contour: readonly number[]): { from: number; to: numb
       const count = to - from;
       const sum = sums[to]! - sums[from]!;
       const deviation = squares[to]! - squares[from]! - (sum * sum) / count;
-      const total = cost[from]! + price + Math.max(0, deviation);
+      const total = cost[from]! + price + (deviation > 0 ? deviation : 0);
       if (total < cost[to]!) {
         cost[to] = total;
         back[to] = from;

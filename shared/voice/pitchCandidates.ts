@@ -110,7 +110,8 @@ function cleanedDifference(frame: LagFrame, room: RoomFloor, length: number): Fl
   for (let lag = 0; lag <= lastLag; lag++) {
     const both = m[lag]!;
     const share = (length - lag) / (windowLength - lag);
-    const rest = Math.max(both - share * roomM[lag]!, 0.2 * both);
+    const cleaned = both - share * roomM[lag]!;
+    const rest = cleaned > 0.2 * both ? cleaned : 0.2 * both;
     n[lag] = rest > 0 ? (2 * (r[lag]! - share * roomR[lag]!)) / rest : 0;
   }
   return n;

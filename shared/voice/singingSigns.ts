@@ -61,7 +61,9 @@ function likenessToSpeech(frames: readonly TrackFrame[], clear: readonly HeardNo
   const midi = frames.flatMap((f) => (f.hz === null ? [] : [12 * Math.log2(f.hz)])).sort((a, b) => a - b);
   const span = midi[Math.floor(midi.length * 0.95)]! - midi[Math.floor(midi.length * 0.05)]!;
   const glide = median(clear.map((n) => Math.abs(glideWithin(frames, n))));
-  return glide / 150 + 4 * (1 - share) + 2 * (0.5 - longShare) - (gridFit(clear) - 0.3) - 1.5 * Math.max(0, longest - 0.6) - 0.12 * Math.max(-3, Math.min(6, span - 6));
+  const band = span < 6 ? 0.2 * (6 - span) : -0.12 * Math.min(6, span - 6);
+  const held = 6 * (1 - share) + 2 * (0.5 - longShare) - 1.5 * Math.max(0, longest - 0.6);
+  return glide / 150 + held + band - (gridFit(clear) - 0.3);
 }
 
 /** How well the notes keep to one grid of semitones, whatever its offset: 0 at random to 1 exactly. */

@@ -6,7 +6,17 @@ const query = require("@tanstack/eslint-plugin-query");
 const globals = require("globals");
 
 module.exports = defineConfig([
-  { ignores: ["dist*/**", "build/**", ".expo/**", ".data/**", "node_modules/**", "public/worklets/takeWorker.js", "expo-env.d.ts"] },
+  {
+    ignores: [
+      "dist*/**",
+      "build/**",
+      ".expo/**",
+      ".data/**",
+      "node_modules/**",
+      "public/worklets/takeWorker.js",
+      "expo-env.d.ts",
+    ],
+  },
   { linterOptions: { reportUnusedDisableDirectives: "error" } },
   expo,
   ...query.configs["flat/recommended"],
@@ -42,7 +52,10 @@ module.exports = defineConfig([
     files: ["server/**/*.ts"],
     ignores: ["server/env.ts", "server/setup/**", "server/**/*.test.ts"],
     rules: {
-      "no-restricted-properties": ["error", { object: "process", property: "env", message: "Only server/env.ts reads the environment." }],
+      "no-restricted-properties": [
+        "error",
+        { object: "process", property: "env", message: "Only server/env.ts reads the environment." },
+      ],
     },
   },
   {
@@ -52,7 +65,11 @@ module.exports = defineConfig([
     rules: {
       "jsdoc/require-jsdoc": [
         "error",
-        { publicOnly: true, require: { FunctionDeclaration: true }, contexts: ["TSInterfaceDeclaration", "TSTypeAliasDeclaration"] },
+        {
+          publicOnly: true,
+          require: { FunctionDeclaration: true },
+          contexts: ["TSInterfaceDeclaration", "TSTypeAliasDeclaration"],
+        },
       ],
       "no-restricted-globals": ["error", "window", "document", "process", "setTimeout", "fetch"],
       "no-restricted-properties": [
@@ -71,7 +88,14 @@ module.exports = defineConfig([
   { files: ["**/*.test.{ts,tsx}", "__tests__/**"], languageOptions: { globals: globals.jest } },
   {
     files: ["public/worklets/**"],
-    languageOptions: { globals: { AudioWorkletProcessor: "readonly", registerProcessor: "readonly", sampleRate: "readonly", currentTime: "readonly" } },
+    languageOptions: {
+      globals: {
+        AudioWorkletProcessor: "readonly",
+        registerProcessor: "readonly",
+        sampleRate: "readonly",
+        currentTime: "readonly",
+      },
+    },
   },
   prettier,
 ]);

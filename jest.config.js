@@ -27,14 +27,22 @@ const node = {
 module.exports = {
   testTimeout: 30_000,
   projects: [
-    { ...node, displayName: "engine", testMatch: ["<rootDir>/shared/**/*.test.ts", "<rootDir>/__tests__/engine/**/*.test.ts"] },
+    {
+      ...node,
+      displayName: "engine",
+      testMatch: ["<rootDir>/shared/**/*.test.ts", "<rootDir>/__tests__/engine/**/*.test.ts"],
+    },
     {
       ...client,
       displayName: "client",
       preset: "jest-expo/web",
       testMatch: ["<rootDir>/features/**/*.test.ts?(x)", "<rootDir>/__tests__/client/**/*.test.ts?(x)"],
     },
-    { ...node, displayName: "server", testMatch: ["<rootDir>/server/**/*.test.ts", "<rootDir>/__tests__/server/**/*.test.ts"] },
+    {
+      ...node,
+      displayName: "server",
+      testMatch: ["<rootDir>/server/**/*.test.ts", "<rootDir>/__tests__/server/**/*.test.ts"],
+    },
     { ...node, displayName: "journeys", testMatch: ["<rootDir>/__tests__/journeys/**/*.test.ts"] },
     { ...node, displayName: "house", testMatch: ["<rootDir>/__tests__/house/**/*.test.ts"] },
   ],

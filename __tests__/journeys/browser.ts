@@ -40,7 +40,8 @@ export async function openProfile(
   const errors: string[] = [];
   page.on("pageerror", (error) => errors.push(error.message));
   page.on("console", (message) => {
-    if (message.type() === "error" && /Content Security Policy|Uncaught/.test(message.text())) errors.push(message.text());
+    if (message.type() === "error" && /Content Security Policy|Uncaught/.test(message.text()))
+      errors.push(message.text());
   });
   return { context, page, errors };
 }

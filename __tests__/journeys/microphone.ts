@@ -9,7 +9,10 @@ import { writeWav } from "../sound/wavFile";
 const padS = 1;
 
 /** The tune that the journeys sing, as steps above its lowest note: up, around and down again, with held ends. */
-const tune = [0, 4, 7, 9, 12, 14, 12, 9, 7, 5, 4, 2, 0].map((step) => ({ step, durationS: step === 0 || step === 14 ? 0.9 : 0.55 }));
+const tune = [0, 4, 7, 9, 12, 14, 12, 9, 7, 5, 4, 2, 0].map((step) => ({
+  step,
+  durationS: step === 0 || step === 14 ? 0.9 : 0.55,
+}));
 
 /** A folder of wav files for one test file's browsers; `remove` takes it away. */
 export function makeMicrophones() {
@@ -31,7 +34,11 @@ export function makeMicrophones() {
         vibrato: { rateHz: 5.6, extentCents: 35 },
         tract: lowestMidi < 55 ? 1 : 1.15,
       });
-      return { wav: keep(`voice-${lowestMidi}`, pcm, sampleRate), lowestMidi: truth.lowestMidi, highestMidi: truth.highestMidi };
+      return {
+        wav: keep(`voice-${lowestMidi}`, pcm, sampleRate),
+        lowestMidi: truth.lowestMidi,
+        highestMidi: truth.highestMidi,
+      };
     },
     /** Debian's sampled choir singing the same; null where FluidSynth or its sound font is not installed. */
     choir(lowestMidi: number) {

@@ -31,7 +31,9 @@ async function singUntilHeard(page: Page): Promise<void> {
   await page.getByRole("link", { name: "Sing a few seconds" }).click();
   await page.getByTestId("sing-start").click();
   // the tune lasts eight seconds behind one second of silence
-  await page.waitForFunction(() => Number.parseInt(document.querySelector('[data-testid="take-seconds"]')?.textContent ?? "0", 10) >= 9);
+  await page.waitForFunction(
+    () => Number.parseInt(document.querySelector('[data-testid="take-seconds"]')?.textContent ?? "0", 10) >= 9,
+  );
   await page.getByTestId("sing-stop").click();
 }
 
@@ -58,7 +60,8 @@ describe("a sung phrase", () => {
 
   test("by Debian's sampled choir gives its true lowest and highest notes", async () => {
     const choir = microphones.choir(60);
-    if (!choir) throw new Error("FluidSynth or its sound font is missing: apt-get install fluidsynth fluid-soundfont-gm");
+    if (!choir)
+      throw new Error("FluidSynth or its sound font is missing: apt-get install fluidsynth fluid-soundfont-gm");
     const { page } = await open({ wav: choir.wav });
     await singUntilHeard(page);
     expect(await ladderWords(page)).toContain(heardFrom(choir.lowestMidi, choir.highestMidi));
@@ -70,8 +73,12 @@ describe("a sung phrase", () => {
     await page.goto("/voice/sing");
     await page.getByTestId("sing-start").click();
     await page.getByTestId("pitch-trail").waitFor();
-    await page.waitForFunction(() => /^[A-G]/.test(document.querySelector('[data-testid="note-now"]')?.textContent ?? ""));
-    await page.waitForFunction(() => Number.parseInt(document.querySelector('[data-testid="take-seconds"]')?.textContent ?? "0", 10) >= 9);
+    await page.waitForFunction(() =>
+      /^[A-G]/.test(document.querySelector('[data-testid="note-now"]')?.textContent ?? ""),
+    );
+    await page.waitForFunction(
+      () => Number.parseInt(document.querySelector('[data-testid="take-seconds"]')?.textContent ?? "0", 10) >= 9,
+    );
     await page.getByTestId("sing-stop").click();
     const summary = await ladderWords(page);
     await page.getByTestId("take-play").click();
@@ -113,7 +120,9 @@ describe("when it cannot be heard", () => {
     const { page } = await open({ wav: microphones.silence() });
     await page.goto("/voice/sing");
     await page.getByTestId("sing-start").click();
-    await page.waitForFunction(() => Number.parseInt(document.querySelector('[data-testid="take-seconds"]')?.textContent ?? "0", 10) >= 4);
+    await page.waitForFunction(
+      () => Number.parseInt(document.querySelector('[data-testid="take-seconds"]')?.textContent ?? "0", 10) >= 4,
+    );
     await page.getByTestId("sing-stop").click();
     await page.getByTestId("take-failure-too-quiet").waitFor();
     await page.getByTestId("sing-again").waitFor();

@@ -7,7 +7,13 @@ import { ensureWebClient } from "./webClient.mjs";
 
 /** Runs every check (or only those named) and prints the closing line; returns the exit code. */
 export async function runChecks({ root, say, databaseUrl, only }) {
-  const env = { ...process.env, TEST_DATABASE_URL: databaseUrl, NODE_ENV: "test", EXPO_NO_TELEMETRY: "1", EXPO_OFFLINE: "1" };
+  const env = {
+    ...process.env,
+    TEST_DATABASE_URL: databaseUrl,
+    NODE_ENV: "test",
+    EXPO_NO_TELEMETRY: "1",
+    EXPO_OFFLINE: "1",
+  };
   const bin = (...parts) => path.join(root, "node_modules", ...parts);
   const tally = { passed: 0, failed: 0 };
   const failures = [];
@@ -29,7 +35,15 @@ export async function runChecks({ root, say, databaseUrl, only }) {
   const jest = (name, projects, ...more) =>
     step(name, async () => {
       const report = path.join(os.tmpdir(), `larkspan-${process.pid}-${name.replaceAll(" ", "-")}.json`);
-      const args = [bin("jest", "bin", "jest.js"), "--selectProjects", ...projects, "--json", "--outputFile", report, ...more];
+      const args = [
+        bin("jest", "bin", "jest.js"),
+        "--selectProjects",
+        ...projects,
+        "--json",
+        "--outputFile",
+        report,
+        ...more,
+      ];
       const { code, output } = await node(args);
       if (!fs.existsSync(report)) return { passed: 0, failed: 1, output };
       const result = JSON.parse(fs.readFileSync(report, "utf8"));
@@ -43,7 +57,16 @@ export async function runChecks({ root, say, databaseUrl, only }) {
       plain("types", bin("typescript", "bin", "tsc"), "--noEmit"),
       plain("types of the pure engine", bin("typescript", "bin", "tsc"), "-p", "tsconfig.shared.json"),
       plain("lint", bin("eslint", "bin", "eslint.js"), ".", "--max-warnings", "0"),
-      plain("dependency rules", bin("dependency-cruiser", "bin", "dependency-cruise.mjs"), "--config", ".dependency-cruiser.cjs", "app", "features", "server", "shared"),
+      plain(
+        "dependency rules",
+        bin("dependency-cruiser", "bin", "dependency-cruise.mjs"),
+        "--config",
+        ".dependency-cruiser.cjs",
+        "app",
+        "features",
+        "server",
+        "shared",
+      ),
       plain("dead code", bin("knip", "bin", "knip.js")),
       step("web client", async () => {
         try {
@@ -54,9 +77,14 @@ export async function runChecks({ root, say, databaseUrl, only }) {
         }
       }),
     ],
-    [jest("house", ["house"], "-w", "1"), jest("client", ["client"], "-w", "1"), jest("server", ["server"], "-w", "1"), jest("engine", ["engine"], "-w", "1")],
+    [
+      jest("house", ["house"], "-w", "1"),
+      jest("client", ["client"], "-w", "1"),
+      jest("server", ["server"], "-w", "1"),
+      jest("engine", ["engine"], "-w", "1"),
+    ],
   ];
-  const last = [jest("browser journeys", ["journeys"], "-w", "1")];
+  const last = [jest("browser journeys", ["journeys"], "-w", "2")];
 
   const runAll = async (steps) => {
     for (const { name, run } of steps) {
@@ -65,7 +93,9 @@ export async function runChecks({ root, say, databaseUrl, only }) {
       const { passed, failed, output } = await run();
       tally.passed += passed;
       tally.failed += failed;
-      say(`${failed ? "FAILED" : "ok    "} ${name}: ${passed} passed, ${failed} failed (${((performance.now() - begun) / 1000).toFixed(1)} s)`);
+      say(
+        `${failed ? "FAILED" : "ok    "} ${name}: ${passed} passed, ${failed} failed (${((performance.now() - begun) / 1000).toFixed(1)} s)`,
+      );
       if (failed) failures.push(`\n--- ${name} ---\n${output.trim()}`);
     }
   };

@@ -9,7 +9,16 @@ export function ensureDebianPackages(names, say) {
   if (!may || spawnSync("which", ["apt-get"]).status !== 0) return missing;
   say(`Installing from Debian: ${missing.join(", ")}`);
   const apt = (...args) => {
-    const line = [...may, "env", "DEBIAN_FRONTEND=noninteractive", "apt-get", "-q", "-o", "DPkg::Lock::Timeout=300", ...args];
+    const line = [
+      ...may,
+      "env",
+      "DEBIAN_FRONTEND=noninteractive",
+      "apt-get",
+      "-q",
+      "-o",
+      "DPkg::Lock::Timeout=300",
+      ...args,
+    ];
     return spawnSync(line[0], line.slice(1), { encoding: "utf8", maxBuffer: 1 << 26 });
   };
   apt("update");

@@ -50,7 +50,12 @@ const commands = {
     if (absent.length > 0) say(`Not to be had here, so the tests that need them do not run: ${absent.join(", ")}`);
     const cluster = await ensureCluster({ root, ...CLUSTERS.test });
     try {
-      process.exitCode = await runChecks({ root, say, databaseUrl: cluster.url("postgres"), only: process.argv.slice(3) });
+      process.exitCode = await runChecks({
+        root,
+        say,
+        databaseUrl: cluster.url("postgres"),
+        only: process.argv.slice(3),
+      });
     } finally {
       if (!cluster.up) stopCluster({ root, name: "test" });
     }

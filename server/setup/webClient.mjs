@@ -31,7 +31,14 @@ export async function ensureWebClient({ root, say }) {
         cwd: root,
         encoding: "utf8",
         maxBuffer: 1 << 26,
-        env: { ...process.env, NODE_ENV: "production", CI: "1", EXPO_NO_TELEMETRY: "1", EXPO_OFFLINE: "1", BROWSER: "none" },
+        env: {
+          ...process.env,
+          NODE_ENV: "production",
+          CI: "1",
+          EXPO_NO_TELEMETRY: "1",
+          EXPO_OFFLINE: "1",
+          BROWSER: "none",
+        },
       },
     );
     if (run.status !== 0) throw new Error(`The web client could not be built:\n${run.stdout}${run.stderr}`);
@@ -53,16 +60,24 @@ function pack(file) {
 
 function fingerprint(root) {
   const hash = createHash("sha256");
-  const files = [...configs, ...sources.flatMap((dir) => walk(path.join(root, dir)).map((file) => path.join(dir, file)))];
+  const files = [
+    ...configs,
+    ...sources.flatMap((dir) => walk(path.join(root, dir)).map((file) => path.join(dir, file))),
+  ];
   for (const file of files.filter((name) => name !== made && !/\.test\.tsx?$/.test(name)).sort()) {
-    hash.update(file).update("\0").update(fs.readFileSync(path.join(root, file))).update("\0");
+    hash
+      .update(file)
+      .update("\0")
+      .update(fs.readFileSync(path.join(root, file)))
+      .update("\0");
   }
   return hash.digest("hex");
 }
 
 function walk(dir) {
   if (!fs.existsSync(dir)) return [];
-  return fs.readdirSync(dir, { recursive: true, withFileTypes: true })
+  return fs
+    .readdirSync(dir, { recursive: true, withFileTypes: true })
     .filter((entry) => entry.isFile())
     .map((entry) => path.relative(dir, path.join(entry.parentPath ?? entry.path, entry.name)));
 }

@@ -1,0 +1,148 @@
+import { readFileSync } from "node:fs";
+import type { Browser, Page } from "playwright-core";
+import { launchBrowser, openProfile, type Viewport } from "./browser";
+import { startProduct, type Product } from "./product";
+
+const axe = readFileSync(require.resolve("axe-core/axe.min.js"), "utf8");
+let product: Product;
+let browser: Browser;
+
+beforeAll(async () => {
+  product = await startProduct();
+  browser = await launchBrowser("none");
+}, 60_000);
+afterAll(async () => {
+  await browser.close();
+  await product.stop();
+});
+
+/** A profile signed in as one of the demonstration's singers, who has a voice, songs and decided keys. */
+async function asMaren(viewport: Viewport, colorScheme: "light" | "dark") {
+  const profile = await openProfile(browser, product.address, viewport, colorScheme);
+  const { page } = profile;
+  await page.goto("/account/sign-in?next=/songs");
+  await page.getByTestId("email").fill("maren@orlow-quay.example");
+  await page.getByTestId("password").fill("slipway lantern");
+  await page.getByTestId("send").click();
+  await page.getByText("Lantern on the Slipway").waitFor();
+  const songs = (await page.evaluate(
+    "fetch('/api/auth/refresh', { method: 'POST' }).then((r) => r.json()).then(({ accessToken }) => fetch('/api/songs', { headers: { authorization: `Bearer ${accessToken}` } })).then((r) => r.json())",
+  )) as { id: string; title: string }[];
+  const ferry = songs.find(({ title }) => title === "The Half-Past-Nine Ferry");
+  if (!ferry) throw new Error("The demonstration has no ferry.");
+  return { ...profile, ferry: ferry.id };
+}
+
+/** Every screen with something on it, and how one knows that it is all there. */
+function screens(ferry: string): [path: string, ready: (page: Page) => Promise<unknown>][] {
+  const heading = (page: Page) => page.getByRole("heading", { level: 1 }).first().waitFor();
+  return [
+    ["/", heading],
+    ["/voice", (page) => page.getByTestId("take-row").first().waitFor()],
+    ["/voice/sing", (page) => page.getByTestId("sing-start").waitFor()],
+    ["/voice/by-hand", (page) => page.getByTestId("by-hand-lowest").waitFor()],
+    ["/songs", (page) => page.getByText("Lantern on the Slipway").waitFor()],
+    ["/songs/new", (page) => page.getByTestId("song-chart").waitFor()],
+    [`/songs/${ferry}`, (page) => page.getByTestId("chart").waitFor()],
+    [`/songs/${ferry}/edit`, (page) => page.getByTestId("written-key").waitFor()],
+    [`/songs/${ferry}/keys`, (page) => page.getByText("The Half-Past-Nine Ferry").first().waitFor()],
+    [`/songs/${ferry}/ways`, (page) => page.getByTestId("ways").waitFor()],
+    ["/instruments", (page) => page.getByTestId("instrument-ukulele").waitFor()],
+    ["/account", (page) => page.getByTestId("account-email").waitFor()],
+    ["/nowhere", heading],
+  ];
+}
+
+interface Finding {
+  id: string;
+  nodes: { target: string[] }[];
+}
+
+/** The same product before anything was done in it. */
+const strangersScreens: [path: string, ready: (page: Page) => Promise<unknown>][] = [
+  ["/voice", (page) => page.getByRole("link", { name: "Sing a few seconds" }).waitFor()],
+  ["/songs", (page) => page.getByText("Lantern on the Slipway").waitFor()],
+  ["/account", (page) => page.getByTestId("to-sign-up").waitFor()],
+  ["/account/sign-in", (page) => page.getByTestId("email").waitFor()],
+  ["/account/sign-up", (page) => page.getByTestId("email").waitFor()],
+];
+
+/** What is wrong with one screen: axe's findings, and whether it scrolls sideways. */
+async function faults(page: Page): Promise<string[]> {
+  await page.evaluate(axe);
+  const violations = (await page.evaluate(
+    "axe.run({ resultTypes: ['violations'] }).then((r) => r.violations)",
+  )) as Finding[];
+  const said = violations.map(({ id, nodes }) => `${id}: ${nodes.map(({ target }) => target.join(" ")).join(", ")}`);
+  return (await scrollsSideways(page)) ? [...said, "scrolls sideways"] : said;
+}
+
+function scrollsSideways(page: Page): Promise<boolean> {
+  return page.evaluate("document.documentElement.scrollWidth > document.documentElement.clientWidth");
+}
+
+describe.each([
+  ["phone", "light"],
+  ["phone", "dark"],
+  ["wide", "light"],
+  ["wide", "dark"],
+] as const)("every screen on the %s in %s colours", (viewport, scheme) => {
+  test("is accessible, throws nothing and does not scroll sideways", async () => {
+    const stranger = await openProfile(browser, product.address, viewport, scheme);
+    const singer = await asMaren(viewport, scheme);
+    const findings: Record<string, string[]> = {};
+    const look = async (page: Page, who: string, list: typeof strangersScreens) => {
+      for (const [path, ready] of list) {
+        await page.goto(path);
+        await ready(page);
+        const said = await faults(page);
+        if (said.length > 0) findings[`${who} at ${path}`] = said;
+      }
+    };
+    await look(stranger.page, "stranger", strangersScreens);
+    await look(singer.page, "singer", screens(singer.ferry));
+    expect(findings).toEqual({});
+    expect([...stranger.errors, ...singer.errors]).toEqual([]);
+    await stranger.context.close();
+    await singer.context.close();
+  }, 180_000);
+});
+
+test("no screen scrolls sideways on 320 px", async () => {
+  const { context, page, ferry } = await asMaren("phone", "light");
+  await page.setViewportSize({ width: 320, height: 640 });
+  const wider: string[] = [];
+  for (const [path, ready] of screens(ferry)) {
+    await page.goto(path);
+    await ready(page);
+    if (await scrollsSideways(page)) wider.push(path);
+  }
+  expect(wider).toEqual([]);
+  await context.close();
+}, 120_000);
+
+test("♯ and ♭ are drawn from the shipped music font, in text and in charts", async () => {
+  const { context, page, ferry } = await asMaren("wide", "light");
+  await page.goto(`/songs/${ferry}/keys`);
+  await page.getByRole("table").getByText("♭").first().waitFor();
+  const session = await context.newCDPSession(page);
+  await session.send("DOM.enable");
+  await session.send("CSS.enable");
+  await session.send("DOM.getDocument");
+  const { searchId, resultCount } = await session.send("DOM.performSearch", { query: "//*[text()='♯' or text()='♭']" });
+  expect(resultCount).toBeGreaterThan(4);
+  const { nodeIds } = await session.send("DOM.getSearchResults", { searchId, fromIndex: 0, toIndex: resultCount });
+  for (const nodeId of nodeIds) {
+    const { fonts } = await session.send("CSS.getPlatformFontsForNode", { nodeId });
+    expect(fonts.map(({ familyName, isCustomFont }) => [familyName, isCustomFont])).toEqual([["Noto Music", true]]);
+  }
+  await context.close();
+}, 60_000);
+
+test("an address that nothing stands at answers 404 and says so", async () => {
+  const { context, page } = await openProfile(browser, product.address, "phone");
+  expect((await page.goto("/nowhere"))?.status()).toBe(404);
+  await page.getByText("Nothing stands at this address").waitFor();
+  expect((await page.goto("/songs"))?.status()).toBe(200);
+  await context.close();
+});

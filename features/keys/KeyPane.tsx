@@ -64,7 +64,7 @@ export function KeyPane({
           )}
         </>
       ) : (
-        <KeysMissing songId={song.id} missing={song.tune ? "voice" : "tune"} />
+        <KeysMissing song={song} />
       )}
       {decision && (
         <View style={{ marginTop: 12 }}>

@@ -87,7 +87,7 @@ export function KeysScreen({ song, keys, pending, voice, wayOf, instrument }: Ke
       {pending ? (
         <Skeleton bars={[{ height: 372 }, { height: 56 }, { height: 48 }, { height: 48 }]} words="Scoring the keys" />
       ) : !rows || !keys.voice || !selected ? (
-        <KeysMissing songId={song.id} missing={song.tune ? "voice" : "tune"} />
+        <KeysMissing song={song} />
       ) : (
         <>
           {selected.coarse && (

@@ -2,6 +2,7 @@ import { newId } from "@/features/api/newId";
 import { session } from "@/features/api/session";
 import { shelf } from "@/features/api/shelf";
 import type { Song } from "@/shared/contract/song";
+import { lazyReaders } from "./lazyReaders";
 
 const mark = "larkspan.demo-songs";
 
@@ -27,10 +28,7 @@ export function seedDemoSongs(): Promise<void> {
 async function seed(): Promise<void> {
   const known = readMark();
   if (known === "refused" || known?.done || (await session.settled()).status !== "visitor") return;
-  const [{ demoSongs }, { readMelodyFile }] = await Promise.all([
-    import("@/shared/songs/demoSongs"),
-    import("@/shared/songs/melodyFile"),
-  ]);
+  const [{ demoSongs }, { readMelodyFile }] = await Promise.all([lazyReaders.demoSongs(), lazyReaders.melodyFile()]);
   const ids = known?.ids ?? Object.fromEntries(demoSongs.map((song) => [song.id, newId()]));
   writeMark({ ids, done: false });
   for (const demo of demoSongs) {

@@ -1,4 +1,5 @@
 import type { MelodyVoice } from "@/shared/songs/melodyVoice";
+import { lazyReaders } from "./lazyReaders";
 
 const largest = 5 * 1024 * 1024;
 
@@ -13,7 +14,7 @@ export async function readMelody(file: File): Promise<MelodyReading> {
     };
   if (file.size === 0) return { ok: false, reason: "This file is empty. Choose another one." };
   try {
-    const [{ readMelodyFile }, bytes] = await Promise.all([import("@/shared/songs/melodyFile"), file.arrayBuffer()]);
+    const [{ readMelodyFile }, bytes] = await Promise.all([lazyReaders.melodyFile(), file.arrayBuffer()]);
     return readMelodyFile(file.name, new Uint8Array(bytes));
   } catch {
     return {

@@ -1,0 +1,69 @@
+import { QueryClientProvider } from "@tanstack/react-query";
+import { act, renderHook, waitFor } from "@testing-library/react";
+import { aSong, aVoice } from "@/__tests__/client/belongings";
+import { kept, refuseStorage } from "@/__tests__/client/memoryIdb";
+import { queryClient } from "@/features/api/queryClient";
+import { shelf } from "@/features/api/shelf";
+import { keyInView, useSongKeys } from "./useSongKeys";
+
+jest.mock("idb-keyval", () => jest.requireActual<{ memoryIdb: object }>("@/__tests__/client/memoryIdb").memoryIdb);
+
+const song = aSong({ tune: { kind: "span", lowMidi: 57, highMidi: 71, home: "D" } });
+const voice = aVoice();
+const singing = { range: { lowMidi: 51, highMidi: 74 }, comfort: { lowMidi: 55, highMidi: 70 } };
+
+beforeEach(async () => {
+  kept.clear();
+  refuseStorage(null);
+  queryClient.clear();
+  await shelf.put("songs", song);
+  await shelf.put("voices", voice);
+});
+
+function open(singer: Parameters<typeof useSongKeys>[1]) {
+  const wrapper = ({ children }: { children: React.ReactNode }) => (
+    <QueryClientProvider client={queryClient}>{children}</QueryClientProvider>
+  );
+  return renderHook(() => useSongKeys(song, singer), { wrapper }).result;
+}
+
+test("a taken key is kept with why and by which voice; the next one takes its place", async () => {
+  const keys = open({ voice, singing });
+  act(() => keys.current.take({ tonic: "C", shift: -2, instrument: "guitar", way: null }));
+  await waitFor(() => expect(keys.current.decision?.tonic).toBe("C"));
+  const first = keys.current.decision!;
+  const row = keys.current.rows?.find((each) => each.shift === -2);
+  expect(first).toMatchObject({ songId: song.id, voiceId: voice.id, score: row?.score, reason: row?.reason });
+  act(() =>
+    keys.current.take({ tonic: "Bb", shift: -4, instrument: "guitar", way: { retune: 0, capo: 3, shapeKey: "G" } }),
+  );
+  await waitFor(() => expect(keys.current.decision?.tonic).toBe("Bb"));
+  expect(await shelf.list("decisions")).toHaveLength(1);
+  expect(keys.current.decision?.id).toBe(first.id);
+  expect(keyInView(keys.current, null)).toMatchObject({ shift: -4, key: { tonic: "Bb", mode: "major" } });
+});
+
+test("undo takes the decision away, and the best key is in hand again", async () => {
+  const keys = open({ voice, singing });
+  act(() => keys.current.take({ tonic: "G", shift: 5, instrument: null, way: null }));
+  await waitFor(() => expect(keys.current.inHand?.because).toBe("decided"));
+  act(() => keys.current.undo());
+  await waitFor(() => expect(keys.current.inHand?.because).toBe("best"));
+  expect(await shelf.list("decisions")).toEqual([]);
+});
+
+test("a key may be taken without a voice, and says that nobody judged it", async () => {
+  const keys = open({ voice: null, singing: null });
+  act(() => keys.current.take({ tonic: "C", shift: -2, instrument: null, way: null }));
+  await waitFor(() => expect(keys.current.decision).not.toBeNull());
+  expect(keys.current.decision).toMatchObject({ voiceId: null, score: null });
+  expect(keys.current.decision?.reason).toMatch(/without a voice/);
+});
+
+test("a key that cannot be kept is told, and nothing is taken", async () => {
+  const keys = open({ voice, singing });
+  refuseStorage(new DOMException("full", "QuotaExceededError"));
+  act(() => keys.current.take({ tonic: "C", shift: -2, instrument: null, way: null }));
+  await waitFor(() => expect(keys.current.error?.message).toMatch(/no room left/));
+  expect(keys.current.decision).toBeNull();
+});

@@ -163,9 +163,9 @@ describe("a chart", () => {
       `Verse ${" ".repeat(100)}1 ${" ".repeat(100)}x\n`.repeat(450),
     ];
     for (const hostile of long) {
-      const begun = performance.now();
+      const begun = process.cpuUsage();
       expect(printChart(parseChart(hostile))).toBe(hostile);
-      expect(performance.now() - begun).toBeLessThan(1000);
+      expect(process.cpuUsage(begun).user / 1000).toBeLessThan(1000);
     }
   });
 });

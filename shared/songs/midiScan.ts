@@ -19,6 +19,10 @@ const tooMany: MidiScan = { ok: false, reason: "This file holds too many notes."
 export function scanMidi(bytes: Uint8Array): MidiScan {
   if (!hasTag(bytes, 0, "MThd")) return { ok: false, reason: "This is no MIDI file." };
   if (bytes.length < 14) return damaged;
+  const division = bytes[12]! * 256 + bytes[13]!;
+  if (division >= 0x8000)
+    return { ok: false, reason: "This MIDI file counts film frames, not beats; it cannot be read." };
+  if (division === 0) return damaged;
   let place = 8 + uint32(bytes, 4);
   let notes = 0;
   let tracks = 0;

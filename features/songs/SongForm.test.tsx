@@ -77,6 +77,7 @@ test("what is missing is said at its field, and nothing typed is lost", async ()
   save();
   expect((await screen.findAllByText(/Give the song a title/)).length).toBeGreaterThan(0);
   expect(screen.getByLabelText("Lowest note").getAttribute("aria-invalid")).toBe("true");
+  await waitFor(() => expect(document.activeElement).toBe(screen.getByLabelText("Title")));
   expect((screen.getByLabelText(/^Chart/) as HTMLTextAreaElement).value).toBe(chart);
   expect(saved).toEqual([]);
 });

@@ -1,4 +1,4 @@
-import { useDeferredValue, useEffect, useMemo } from "react";
+import { useDeferredValue, useEffect, useMemo, useState } from "react";
 import { Controller, useForm, useWatch } from "react-hook-form";
 import { View } from "react-native";
 import { Field } from "@/features/ui/Field";
@@ -48,6 +48,11 @@ export function SongForm({ draft, songId, origin, problem, onSave, frame }: Song
     if (kept !== untouched) draftStore.save(songId, JSON.parse(kept) as SongDraft);
   }, [kept, untouched, songId]);
 
+  const [refusals, setRefusals] = useState(0);
+  useEffect(() => {
+    if (refusals > 0) document.querySelector<HTMLElement>('form [aria-invalid="true"]')?.focus();
+  }, [refusals]);
+
   const errors: DraftErrors = Object.fromEntries(
     Object.entries(formState.errors).map(([name, error]) => [name, error?.message]),
   );
@@ -60,8 +65,9 @@ export function SongForm({ draft, songId, origin, problem, onSave, frame }: Song
     // The deferred chart may lag behind the last letter typed.
     const found = findKey({ chart: parseChart(values.chart), ...(notes ? { notes } : null) })?.key ?? null;
     const wrong = Object.entries(draftErrors(values, found)) as [keyof SongDraft, string][];
-    wrong.forEach(([name, message], index) => setError(name, { message }, { shouldFocus: index === 0 }));
-    if (wrong.length === 0) onSave(songFromDraft(values, found, origin()));
+    for (const [name, message] of wrong) setError(name, { message });
+    if (wrong.length > 0) setRefusals(refusals + 1);
+    else onSave(songFromDraft(values, found, origin()));
   });
 
   const text = (

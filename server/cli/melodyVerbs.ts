@@ -1,4 +1,5 @@
 import type { KeyName } from "../../shared/music/keyName";
+import { keySign } from "../../shared/music/keyWords";
 import { type Chart, printChart, transposeChart } from "../../shared/songs/chart";
 import { findKey, type KeyEvidence, rankKeys } from "../../shared/songs/findKey";
 import type { Melody, MelodyNote } from "../../shared/songs/melody";
@@ -60,10 +61,10 @@ export const transposeVerb: Verb = {
       const chart = await chartFromFile(file);
       const from = source ?? writtenKey(chart, target);
       if (from.mode === "major" && target.mode === "minor") {
-        throw new BadInput(`${file}: A song in ${keyLabel(from)} stays major when it is moved; name a major key.`);
+        throw new BadInput(`${file}: A song in ${keySign(from)} stays major when it is moved; name a major key.`);
       }
       const to: KeyName = { tonic: target.tonic, mode: from.mode };
-      return { file, from: keyLabel(from), to: keyLabel(to), text: printChart(transposeChart(chart, from, to)) };
+      return { file, from: keySign(from), to: keySign(to), text: printChart(transposeChart(chart, from, to)) };
     });
   },
 };
@@ -104,8 +105,4 @@ function writtenKey(chart: Chart, target: KeyName): KeyName {
   const minor = others.find(({ key }) => key.mode === "minor");
   const close = minor !== undefined && minor.score > best!.score - likelyEnough;
   return target.mode === "minor" && close ? minor.key : best!.key;
-}
-
-function keyLabel({ tonic, mode }: KeyName): string {
-  return mode === "major" ? tonic : mode === "minor" ? `${tonic}m` : `${tonic} ${mode}`;
 }

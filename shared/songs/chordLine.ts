@@ -1,7 +1,7 @@
 import { type Chord, parseChord } from "../music/chord";
 
 /** What one sign of a chord line is. Everything but "chord" and "unread" is left alone by transposition and is no mistake. */
-export type ChartSign = "chord" | "no-chord" | "bar" | "repeat" | "beat" | "remark" | "unread";
+type ChartSign = "chord" | "no-chord" | "bar" | "repeat" | "beat" | "remark" | "unread";
 
 /** One sign of a chord line. */
 export interface ChartToken {

@@ -39,6 +39,16 @@ describe.each(demoSongs.map((song) => [song.title, song] as const))("%s", (_, so
     expect(noteName(notes.at(-1)!.midi).slice(0, -1)).toBe(song.writtenKey.tonic);
   });
 
+  test("has the same notes at hand without a reader", () => {
+    expect(song.notes).toEqual(
+      melody.notes.map(({ start, duration, midi }) => ({
+        start: expect.closeTo(start, 6),
+        duration: expect.closeTo(duration, 6),
+        midi,
+      })),
+    );
+  });
+
   test("sings every syllable of its first verse and chorus on a note", () => {
     expect(lyrics).toHaveLength(melody.notes.length);
     const verseAndChorus = sung(song).filter(({ label }) => label === "Verse 1" || label === "Chorus");

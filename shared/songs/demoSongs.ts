@@ -1,4 +1,5 @@
 import type { KeyName } from "../music/keyName";
+import type { MelodyNote } from "./melody";
 
 /** A song made up for the demonstration: words, chords and tune are the project's own. */
 export interface DemoSong {
@@ -9,6 +10,8 @@ export interface DemoSong {
   writtenKey: KeyName;
   /** the tune of a verse and the chorus with their words, ABC notation */
   abc: string;
+  /** the same notes, for those who have no need of an ABC reader; times in quarter notes */
+  notes: readonly MelodyNote[];
   beatsPerBar: number;
   /** beats a minute */
   tempo: number;
@@ -43,6 +46,14 @@ G           D          Bm            G
 two for the kettle and three for the stair,
 D              A               D
 leave them the lamp beside the chair.`;
+
+/** Pitch and length of each note; "-" is a rest. */
+const lanternNotes = `
+66 0.5, 66 0.5, 64 0.5, 62 0.5, 67 0.5, 67 0.5, 66 0.5, 64 0.5, 66 3, - 1, 66 0.5, 66 0.5, 64 0.5, 62 0.5, 62
+0.5, 62 0.5, 59 0.5, 59 0.5, 64 3, - 1, 67 1, 67 0.5, 67 0.5, 69 1, 69 0.5, 66 0.5, 66 1, 62 0.5, 59 0.5, 59
+2, 62 1, 62 0.5, 64 0.5, 64 0.5, 61 0.5, 57 0.5, 61 0.5, 62 3, - 1, 67 1, 69 0.5, 71 0.5, 69 1, 66 1, 69 1, 69
+1, 66 1.5, 64 0.5, 67 1, 67 1, 71 1.5, 69 0.5, 69 1, 64 1, 66 2, 67 1, 69 0.5, 71 0.5, 69 1, 66 1, 69 1, 69 1,
+66 1, 62 1/3, 64 1/3, 66 1/3, 67 1, 71 1, 64 1, 61 1, 62 3`;
 
 const lanternTune = `X:1
 T:Lantern on the Slipway
@@ -108,6 +119,14 @@ one yellow window, one kettle, one door,
         C              D          G
 and the half-past-nine ferry puts in at your shore.`;
 
+/** Pitch and length of each note; "-" is a rest. */
+const ferryNotes = `
+71 1, 71 1, 69 1, 72 1, 71 1, 69 1, 71 1, 69 1, 67 1, 74 3, 64 1, 64 1, 67 1, 67 1, 64 1, 62 1, 66 1, 62 1, 66
+1, 69 3, 71 1, 72 1, 74 1, 76 1, 76 1, 74 1, 74 1, 72 1, 71 1, 71 2, 69 1, 72 1, 71 1, 69 1, 69 1, 67 1, 66 1,
+67 1, 64 1, 62 1, 67 2, 74 1, 76 3, 72 3, 74 1, 72 1, 71 1, 74 3, 69 1, 71 1, 69 1, 67 1, 69 1, 71 1, 72 1, 71
+1, 67 1, 69 3, 71 1, 72 1, 74 1, 76 1, 74 1, 72 1, 74 1, 71 1, 67 1, 71 2, 69 1, 72 1, 71 1, 69 1, 69 1, 67 1,
+66 1, 67 1, 64 1, 62 1, 67 3`;
+
 const ferryTune = `X:1
 T:The Half-Past-Nine Ferry
 M:3/4
@@ -140,6 +159,7 @@ export const demoSongs: readonly DemoSong[] = [
     chart: lanternChart,
     writtenKey: { tonic: "D", mode: "major" },
     abc: lanternTune,
+    notes: laid(lanternNotes),
     beatsPerBar: 4,
     tempo: 84,
   },
@@ -149,7 +169,20 @@ export const demoSongs: readonly DemoSong[] = [
     chart: ferryChart,
     writtenKey: { tonic: "G", mode: "major" },
     abc: ferryTune,
+    notes: laid(ferryNotes),
     beatsPerBar: 3,
     tempo: 92,
   },
 ];
+
+function laid(line: string): MelodyNote[] {
+  let start = 0;
+  const notes: MelodyNote[] = [];
+  for (const sign of line.split(",")) {
+    const [pitch, length] = sign.trim().split(/\s+/);
+    const duration = length === "1/3" ? 1 / 3 : Number(length);
+    if (pitch !== "-") notes.push({ start, duration, midi: Number(pitch) });
+    start += duration;
+  }
+  return notes;
+}

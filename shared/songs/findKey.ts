@@ -32,7 +32,7 @@ export interface KeyFinding {
 }
 
 /** Below this the two best keys cannot honestly be told apart. */
-export const closeMargin = 0.05;
+const closeMargin = 0.05;
 /** Steepness of belief: with much to go by, a lead of this much makes a key e times as likely as the next. */
 const temperature = 0.05;
 /** What a written key is worth, on the scale of the scores. */

@@ -3,6 +3,7 @@ import { glyphs, noteName } from "../../shared/music/pitch";
 import { launchBrowser, openProfile, type Microphone, type Viewport } from "./browser";
 import { makeMicrophones } from "./microphone";
 import { startProduct, type Product } from "./product";
+import { singFor, sungUpTo } from "./singing";
 
 const microphones = makeMicrophones();
 let product: Product;
@@ -29,12 +30,7 @@ async function open(microphone: Microphone, viewport: Viewport = "phone") {
 async function singUntilHeard(page: Page): Promise<void> {
   await page.goto("/");
   await page.getByRole("link", { name: "Sing a few seconds" }).click();
-  await page.getByTestId("sing-start").click();
-  // the tune lasts eight seconds behind one second of silence
-  await page.waitForFunction(
-    () => Number.parseInt(document.querySelector('[data-testid="take-seconds"]')?.textContent ?? "0", 10) >= 9,
-  );
-  await page.getByTestId("sing-stop").click();
+  await singFor(page, 9);
 }
 
 /** What the span ladder says to those who cannot see it. */
@@ -76,9 +72,7 @@ describe("a sung phrase", () => {
     await page.waitForFunction(() =>
       /^[A-G]/.test(document.querySelector('[data-testid="note-now"]')?.textContent ?? ""),
     );
-    await page.waitForFunction(
-      () => Number.parseInt(document.querySelector('[data-testid="take-seconds"]')?.textContent ?? "0", 10) >= 9,
-    );
+    await sungUpTo(page, 9);
     await page.getByTestId("sing-stop").click();
     const summary = await ladderWords(page);
     await page.getByTestId("take-play").click();
@@ -119,11 +113,7 @@ describe("when it cannot be heard", () => {
   test("silence is refused with the reason", async () => {
     const { page } = await open({ wav: microphones.silence() });
     await page.goto("/voice/sing");
-    await page.getByTestId("sing-start").click();
-    await page.waitForFunction(
-      () => Number.parseInt(document.querySelector('[data-testid="take-seconds"]')?.textContent ?? "0", 10) >= 4,
-    );
-    await page.getByTestId("sing-stop").click();
+    await singFor(page, 4);
     await page.getByTestId("take-failure-too-quiet").waitFor();
     await page.getByTestId("sing-again").waitFor();
   });

@@ -2,6 +2,7 @@ import type { Browser, Page } from "playwright-core";
 import { launchBrowser, openProfile, type Viewport } from "./browser";
 import { makeMicrophones } from "./microphone";
 import { startProduct, type Product } from "./product";
+import { singFor } from "./singing";
 
 const microphones = makeMicrophones();
 let product: Product;
@@ -29,11 +30,7 @@ const password = "kettle rain window";
 async function singAndKeep(page: Page): Promise<void> {
   await page.goto("/");
   await page.getByRole("link", { name: "Sing a few seconds" }).click();
-  await page.getByTestId("sing-start").click();
-  await page.waitForFunction(
-    () => Number.parseInt(document.querySelector('[data-testid="take-seconds"]')?.textContent ?? "0", 10) >= 9,
-  );
-  await page.getByTestId("sing-stop").click();
+  await singFor(page, 9);
   await page.getByTestId("sing-keep").click();
   await page.waitForURL("**/voice");
   await page.getByTestId("take-row").waitFor();

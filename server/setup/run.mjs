@@ -61,6 +61,15 @@ const commands = {
     }
   },
 
+  async pictures() {
+    await ensurePackages({ root, say });
+    const cluster = await ensureCluster({ root, ...CLUSTERS.test });
+    await ensureWebClient({ root, say });
+    const args = [...typescript, path.join(root, "__tests__", "journeys", "takePictures.ts")];
+    const stop = () => cluster.up || stopCluster({ root, name: "test" });
+    await together([{ args, env: { TEST_DATABASE_URL: cluster.url("postgres") } }], { stop });
+  },
+
   async engine() {
     await ensurePackages({ root, say });
     const args = [...typescript, path.join(root, "server", "cli", "engine.ts"), ...process.argv.slice(3)];

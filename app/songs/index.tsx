@@ -1,4 +1,5 @@
 import { useQuery } from "@tanstack/react-query";
+import { decidedOn } from "@/features/keys/decide";
 import { decisionFor, decisionQueries } from "@/features/keys/decisionQueries";
 import { ShelfStrip } from "@/features/keys/ShelfStrip";
 import { keyInHand, keyRowsOf } from "@/features/keys/songKeys";
@@ -20,11 +21,12 @@ export default function SongsRoute() {
   const { singing } = useSingingVoice();
   const myKey = (song: Song): ShelfKey | null => {
     const decision = decisionFor(decisions.data ?? [], song.id);
-    const inHand = decision && keyInHand(song, keyRowsOf(song, singing), decision);
+    if (!decision) return null;
+    const inHand = keyInHand(song, keyRowsOf(song, singing), decision);
     if (inHand?.because !== "decided") return null;
     return {
       sign: glyphs(keySign(inHand.key)),
-      words: `My key, ${moveWords(inHand.shift)}`,
+      words: `My key since ${decidedOn(decision)}, ${moveWords(inHand.shift)}. ${decision.reason.replace(/\.$/, "")}`,
       strip: singing && inHand.row ? <ShelfStrip row={inHand.row} singing={singing} /> : null,
     };
   };

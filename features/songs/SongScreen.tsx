@@ -168,7 +168,6 @@ export function SongScreen({ song, target, card, decided, keys, ways, use, onRem
     >
       <View style={{ gap: 14 }}>
         {card}
-        {decided}
         <View
           style={{
             flexDirection: "row",
@@ -197,6 +196,7 @@ export function SongScreen({ song, target, card, decided, keys, ways, use, onRem
           )}
         </View>
         <MovedChart song={song} to={to} level={2} />
+        {decided}
         {tools}
       </View>
     </Screen>

@@ -11,6 +11,7 @@ const examples = files.flatMap((file) =>
 
 test.each(examples)("%s: %s is %s", (file, code, value) => {
   const exported = jest.requireActual<Record<string, unknown>>(join(root, file));
-  const run = (source: string): unknown => new Function(...Object.keys(exported), `return (${source})`)(...Object.values(exported));
+  const run = (source: string): unknown =>
+    new Function(...Object.keys(exported), `return (${source})`)(...Object.values(exported));
   expect(run(code)).toEqual(run(value));
 });

@@ -97,7 +97,7 @@ export function breakingLoadLb(gaugeIn: number): number {
  * @returns frequency in Hz
  * @throws RangeError if an argument is not positive
  * @see ASTM A228/A228M; F = sqrt(386.4 s / d) / (2 L)
- * @example Math.round(breakingHz(0.01, 25.5)) // => 451
+ * @example breakingHz(0.01, 25.5).toFixed(1) // => "451.5"
  */
 export function breakingHz(gaugeIn: number, scaleIn: number): number {
   if (!(scaleIn > 0)) throw new RangeError("scaleIn must be a positive length in inches");

@@ -1,16 +1,16 @@
 import { act, fireEvent, render, screen } from "@testing-library/react";
 import { useState } from "react";
-import { Button } from "./Button";
-import { Chip } from "./Chip";
-import { Choice } from "./Choice";
-import { Field } from "./Field";
-import { Form } from "./Form";
-import { IconButton } from "./IconButton";
-import { LiveText } from "./LiveText";
-import { QueryState, type QueryLike } from "./QueryState";
-import { Segmented } from "./Segmented";
-import { layoutFor } from "./useLayout";
-import { radioTarget } from "./useRadioKeys";
+import { Button } from "@/features/ui/Button";
+import { Chip } from "@/features/ui/Chip";
+import { Choice } from "@/features/ui/Choice";
+import { Field } from "@/features/ui/Field";
+import { Form } from "@/features/ui/Form";
+import { IconButton } from "@/features/ui/IconButton";
+import { LiveText } from "@/features/ui/LiveText";
+import { QueryState, type QueryLike } from "@/features/ui/QueryState";
+import { Segmented } from "@/features/ui/Segmented";
+import { layoutFor } from "@/features/ui/useLayout";
+import { radioTarget } from "@/features/ui/useRadioKeys";
 
 const options = [
   { value: "a", label: "Box guitar", hint: "A D F♯" },

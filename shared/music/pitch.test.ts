@@ -54,3 +54,14 @@ test("frequencies and notes that cannot be are the caller's mistake", () => {
   expect(() => hzToMidi(0)).toThrow(RangeError);
   expect(() => noteName(Number.NaN)).toThrow(RangeError);
 });
+
+describe("glyphs", () => {
+  test.each([
+    ["Above the band, Abandon Bb and Ebb", "Above the band, Abandon B♭ and E♭♭"],
+    ["Bbm7 Ebmaj7 Abdim Dbsus4 Gbadd9 Bb/D F#/A#", "B♭m7 E♭maj7 A♭dim D♭sus4 G♭add9 B♭/D F♯/A♯"],
+    ["Cm7b5 G7#9 C7b9 Ab", "Cm7♭5 G7♯9 C7♭9 A♭"],
+    ["web2 and C4", "web2 and C4"],
+  ])("sets %s as %s", (plain, set) => {
+    expect(glyphs(plain)).toBe(set);
+  });
+});

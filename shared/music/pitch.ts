@@ -77,16 +77,22 @@ export function pitchClass(midi: number): number {
   return ((Math.round(midi) % 12) + 12) % 12;
 }
 
+/** An accidental behind a note letter, but not inside a word: "Bbm7" and "Eb", not "Above". */
+const behindLetter = /(?<![A-Za-z])([A-G])(##|#|(?:bb|b)(?=$|[^a-z]|m(?![a-z])|maj|min|dim|aug|sus|add))/g;
+/** An accidental before a degree: "m7b5", "#11", "b7". */
+const beforeDegree = /#(?=\d)|(?<![a-ln-z])b(?=\d)/g;
+
 /**
  * Sets accidentals as music glyphs for people to read.
  *
- * @param text note, key or chord names with ASCII accidentals
- * @returns the same with ♯ and ♭; a "b" counts as a flat only behind a capital A-G or a number's degree sign place ("b7")
- * @example glyphs("F#m7b5 to Bb3") // => "F♯m7♭5 to B♭3"
+ * @param text sentences, note, key or chord names with ASCII accidentals
+ * @returns the same with ♯ and ♭; words that only begin like a note stay as they are
+ * @example glyphs("Above: F#m7b5 to Bb3") // => "Above: F♯m7♭5 to B♭3"
  */
 export function glyphs(text: string): string {
-  return text.replace(/([A-G])(##|#|bb|b)/g, (_, letter: string, accidental: string) => letter + toGlyph(accidental))
-    .replace(/([#b])(?=\d)/g, (accidental) => toGlyph(accidental));
+  return text
+    .replace(behindLetter, (_, letter: string, accidental: string) => letter + toGlyph(accidental))
+    .replace(beforeDegree, toGlyph);
 }
 
 /**

@@ -1,5 +1,4 @@
 import { Autocorrelator } from "pitchy";
-import { ANALYSIS_RATE } from "./resampler";
 
 /** Length of one analysis window in samples at 8 kHz: 64 ms, five periods of the lowest sung notes. */
 export const WINDOW = 512;
@@ -57,9 +56,4 @@ export function createLagMeter(length = WINDOW): (samples: Float32Array, from: n
     for (let i = length / 2 - HOP; i < length / 2 + HOP; i++) middle += window[i]! ** 2;
     return { r, m, levelDb: 10 * Math.log10(middle / HOP) };
   };
-}
-
-/** Lag in samples at 8 kHz of a frequency in Hz. */
-export function lagOf(hz: number): number {
-  return ANALYSIS_RATE / hz;
 }

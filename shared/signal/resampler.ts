@@ -27,7 +27,7 @@ export interface Resampler {
  * @returns the resampler, with its own memory
  * @throws RangeError if the rate is outside 8-192 kHz
  * @see J. F. Kaiser, "Nonrecursive digital filter design using the I0-sinh window function", ISCAS 1974
- * @example createResampler(8000).push(new Float32Array(800)).length // => 792
+ * @example createResampler(8000).push(new Float32Array(800)).length // => 791
  */
 export function createResampler(sampleRate: number): Resampler {
   const rate = Math.round(sampleRate);

@@ -62,11 +62,23 @@ export function findCandidates(frame: LagFrame, room: RoomFloor, short: () => La
   const candidates = clearest < CLEAR_ENOUGH && loudEnough ? joined(long, peaks(cleanedDifference(short(), room, SHORT_WINDOW))) : long;
   const r = new Float32Array(lastLag + 1);
   for (let lag = 0; lag <= lastLag; lag++) r[lag] = frame.r[lag]! - room.r[lag]!;
-  out.candidates = candidates.map((c) => (hasShorter(c, candidates) ? { ...c, presence: harmonicPresence(r, c.hz) } : c));
+  out.candidates = candidates.map((c) => (hasShorter(c, candidates) ? { ...c, presence: harmonicPresence(r, c.hz) } : { ...c }));
+  boundMultiples(out.candidates);
   const whole = out.candidates.filter((c) => c.presence >= WHOLE).reduce((top, c) => Math.max(top, c.clarity), 0);
   const any = out.candidates.reduce((top, c) => Math.max(top, c.clarity), 0);
   out.mixed = any > 0.6 && whole < any - 0.12;
   return out;
+}
+
+/** What a period lacks in harmonics its multiples lack too, whatever the spectrum's resolution says of those. */
+function boundMultiples(candidates: readonly PitchCandidate[]): void {
+  for (const long of candidates) {
+    for (const short of candidates) {
+      const ratio = short.hz / long.hz;
+      const isMultiple = ratio > 1.9 && Math.abs(ratio - Math.round(ratio)) < 0.012 * ratio;
+      if (isMultiple && short.clarity > long.clarity - 0.03) long.presence = Math.min(long.presence, 0.8 * short.presence);
+    }
+  }
 }
 
 /** Whether the sound may be a higher pitch of which this candidate is only a multiple of the period. */

@@ -38,7 +38,7 @@ export function trackPitch(pcm: Float32Array, sampleRate: number): PitchTrack {
   const sound = atAnalysisRate(pcm, sampleRate);
   const measure = createLagMeter();
   const measureShort = createLagMeter(SHORT_WINDOW);
-  const count = Math.floor((pcm.length / sampleRate) * 100);
+  const count = Math.floor((pcm.length * 100) / sampleRate);
   const lagFrames = Array.from({ length: count }, (_, k) => measure(sound, k * HOP - WINDOW / 2));
   const room = measureRoom(lagFrames);
   const finder = createPathFinder();

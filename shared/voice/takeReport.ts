@@ -24,9 +24,6 @@ export interface PitchBand {
   highMidi: number;
 }
 
-/** Why a number is what it is, for people: plain second-person sentences with ♯ and ♭ glyphs. */
-export type Reasons = string[];
-
 /** The outcome of listening to one take. */
 export interface TakeReport {
   verdict: Verdict;
@@ -50,5 +47,6 @@ export interface TakeReport {
   tuningCents: number;
   /** 0 to 1 */
   certainty: number;
-  reasons: Reasons;
+  /** why the numbers are what they are, for people: plain second-person sentences with ♯ and ♭ glyphs */
+  reasons: string[];
 }

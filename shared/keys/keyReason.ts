@@ -100,9 +100,8 @@ export function percent(share: number): string {
  *
  * @param steps whole semitones, 1 or more
  * @returns with its article
- * @example stepsInWords(2) // => "a whole tone"
  */
-export function stepsInWords(steps: number): string {
+function stepsInWords(steps: number): string {
   if (steps === 1) return "a semitone";
   return steps === 2 ? "a whole tone" : semitones(steps);
 }

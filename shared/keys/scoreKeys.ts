@@ -6,7 +6,7 @@ import type { KeyMark, KeyScore, SingingVoice, Tune } from "./keyScore";
 import { tunePitches, type TunePitch } from "./tunePicture";
 
 /** How one sung pitch felt to the singer afterwards. */
-export interface EffortEvidence {
+interface EffortEvidence {
   midi: number;
   /** 1 (no effort) to 5 (very hard) */
   effort: number;
@@ -66,9 +66,8 @@ export function scoreKeys(tune: Tune, voice: SingingVoice, options: KeyOptions =
  * @param from pitch class
  * @param to pitch class
  * @returns semitones, -5 to 6
- * @example nearestMove(7, 0) // => 5
  */
-export function nearestMove(from: number, to: number): number {
+function nearestMove(from: number, to: number): number {
   const up = (((to - from) % 12) + 12) % 12;
   return up > 6 ? up - 12 : up;
 }

@@ -23,9 +23,8 @@ const passingWeight = 0.4;
  * @param duration length in quarter notes (seconds where the tune comes from a recording), > 0
  * @returns 0.4 (passing) to 1 (held)
  * @see common practice; no verified figure exists, so this is a default
- * @example holdWeight(3) // => 1
  */
-export function holdWeight(duration: number): number {
+function holdWeight(duration: number): number {
   const long = (duration - passingUpTo) / (heldFrom - passingUpTo);
   return passingWeight + (1 - passingWeight) * Math.min(1, Math.max(0, long));
 }

@@ -151,9 +151,8 @@ function tensionCautions(retune: number, strings: readonly StringChange[], instr
  *
  * @param semitones not 0; negative for down
  * @returns distance and direction
- * @example distanceInWords(-2) // => "a whole tone down"
  */
-export function distanceInWords(semitones: number): string {
+function distanceInWords(semitones: number): string {
   const size = Math.abs(semitones);
   const words = ["no distance", "a semitone", "a whole tone", "three semitones", "two whole tones"];
   return `${words[size] ?? `${size} semitones`} ${semitones < 0 ? "down" : "up"}`;

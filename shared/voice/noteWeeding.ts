@@ -1,7 +1,7 @@
 import type { HeardNote } from "./sungNotes";
 
 /** A short note farther than this from every other is taken for a tracker's slip or a squeak. */
-export const LONE_DISTANCE_SEMITONES = 5.5;
+const LONE_DISTANCE_SEMITONES = 5.5;
 const LONE_SHORT_S = 0.3;
 const LONE_UNCLEAR_SHORT_S = 0.6;
 const SOFT_DB = 14;

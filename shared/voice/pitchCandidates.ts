@@ -4,7 +4,7 @@ import { harmonicPresence } from "./harmonicPresence";
 import { DIGITAL_SILENCE_DB, type RoomFloor } from "./roomFloor";
 
 /** Search limits of the tracker in Hz. */
-export const LOWEST_HZ = 60;
+const LOWEST_HZ = 60;
 export const HIGHEST_HZ = 1400;
 const MOST_CANDIDATES = 8;
 /** Read once: these stand in the innermost loops. */

@@ -1,7 +1,7 @@
 import type { CandidateFrame, PitchCandidate } from "./pitchCandidates";
 
 /** The pitch decided for one frame. */
-export interface PathPoint {
+interface PathPoint {
   /** null where unvoiced */
   candidate: PitchCandidate | null;
 }

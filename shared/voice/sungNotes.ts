@@ -3,7 +3,7 @@ import type { TrackFrame } from "./pitchTrack";
 import type { SungNote } from "./takeReport";
 
 /** A note counts as held when it stays within this distance of its centre, vibrato removed. */
-export const HELD_WITHIN_CENTS = 60;
+const HELD_WITHIN_CENTS = 60;
 /** Least held time in a phrase, in seconds. */
 export const HELD_IN_PHRASE_S = 0.24;
 /** Least held time in a guided hold, in seconds. */

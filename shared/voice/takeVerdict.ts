@@ -5,7 +5,7 @@ import type { HeardNote } from "./sungNotes";
 import type { Verdict } from "./takeReport";
 
 /** Least held singing for a range in a phrase, in seconds. */
-export const LEAST_HELD_S = 1.2;
+const LEAST_HELD_S = 1.2;
 const LEAST_HELD_IN_HOLD_S = 0.5;
 const QUIET_DB = -60;
 const FAINT_DB = -42;

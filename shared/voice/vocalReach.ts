@@ -1,10 +1,10 @@
 import type { PitchBand, TakeReport } from "./takeReport";
 
 /** Default reserves of a comfortable band under the highest and over the lowest held note, in semitones. */
-export const TOP_RESERVE = 2.5;
-export const BOTTOM_RESERVE = 1.5;
+const TOP_RESERVE = 2.5;
+const BOTTOM_RESERVE = 1.5;
 /** Span, in semitones, that untrained adults like to sing in; the upper figure of the published 19 to 21. */
-export const PREFERRED_SPAN = 20;
+const PREFERRED_SPAN = 20;
 
 /**
  * The band that is comfortable by default: inside the range heard by the default reserves, but always wide enough to

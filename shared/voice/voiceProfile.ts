@@ -33,10 +33,10 @@ export interface VoiceProfile {
 /** One take without another near its end may move an end of the range by at most this much beyond the rest, in semitones. */
 export const MOST_BY_ONE_TAKE = 4;
 /** A take loses half its weight in this many days against the newest one. */
-export const HALF_LIFE_DAYS = 180;
+const HALF_LIFE_DAYS = 180;
 const TRUSTED = 0.6;
 /** A trusted guided hold decides an end of the range against phrases that went at most this much farther, in semitones. */
-export const HOLD_WINS_WITHIN = 2;
+const HOLD_WINS_WITHIN = 2;
 
 /**
  * Merges the takes of one voice by evidence and age. The outermost believed notes make the range; an end shown by one

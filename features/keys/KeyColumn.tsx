@@ -30,7 +30,7 @@ export function KeyColumn({ rows, voice, selected, onSelect }: KeyColumnProps) {
     if (row) onSelect(row);
   });
   const names = [voice.comfort.lowMidi, voice.comfort.highMidi].map((midi, index) => ({
-    name: glyphs(noteName(midi, "flats")),
+    name: glyphs(noteName(midi)),
     x: 66 + keySpanX(midi, scale, step) + (index === 0 ? -step / 2 : step / 2),
   }));
   return (

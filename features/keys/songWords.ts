@@ -1,7 +1,7 @@
 import type { Song } from "@/shared/contract/song";
 import type { SingingVoice } from "@/shared/keys/keyScore";
 import { keySign } from "@/shared/music/keyWords";
-import { glyphs, noteName } from "@/shared/music/pitch";
+import { glyphs, noteName, type Spelling } from "@/shared/music/pitch";
 import { spellingIn } from "./keyRows";
 import { writtenKeyOf } from "./songKeys";
 
@@ -13,15 +13,15 @@ export function songWords(
   instrument: string,
 ): string {
   const written = writtenKeyOf(song);
-  const spelling = written ? spellingIn(written) : "sharps";
-  const ends = (low: number, high: number, kind: "sharps" | "flats") =>
+  const spelling = written ? spellingIn(written) : "common";
+  const ends = (low: number, high: number, kind: Spelling) =>
     glyphs(`${noteName(low, kind)} to ${noteName(high, kind)}`);
   const key = written ? `Written in ${glyphs(keySign(written))}` : "No key yet";
   const tune = song.tune && spanOf(song.tune);
   return [
     tune ? `${key}, tune ${ends(tune.low, tune.high, spelling)}` : key,
     voice &&
-      `your voice ${voiceName === null ? "" : `${voiceName}, `}${ends(voice.range.lowMidi, voice.range.highMidi, "flats")}`,
+      `your voice ${voiceName === null ? "" : `${voiceName}, `}${ends(voice.range.lowMidi, voice.range.highMidi, "common")}`,
     `strings ${instrument}`,
   ]
     .filter((part) => part !== null)

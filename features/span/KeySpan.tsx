@@ -30,7 +30,7 @@ export function KeySpan({
   scale,
   perSemitone = 14.4,
   height = 51,
-  spelling = "sharps",
+  spelling = "common",
   selected = false,
   summary,
 }: KeySpanProps) {

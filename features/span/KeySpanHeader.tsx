@@ -14,7 +14,7 @@ export interface KeySpanHeaderProps {
 }
 
 /** Head of the span column, 56 high: names of the notes, of the comfort band and of the reach. */
-export function KeySpanHeader({ voice, scale, perSemitone = 14.4, spelling = "flats" }: KeySpanHeaderProps) {
+export function KeySpanHeader({ voice, scale, perSemitone = 14.4, spelling = "common" }: KeySpanHeaderProps) {
   const width = keySpanWidth(scale, perSemitone);
   const { left, right, softLeft, softRight } = edges(voice, scale, perSemitone);
   const name = (midi: number) => glyphs(noteName(midi, spelling));

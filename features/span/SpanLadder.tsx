@@ -73,7 +73,7 @@ export function SpanLadder({
   note,
   columnWords,
   shift,
-  spelling = "sharps",
+  spelling = "common",
   summary,
   testID,
 }: SpanLadderProps) {

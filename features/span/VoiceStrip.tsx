@@ -23,7 +23,7 @@ export function stripX(midi: number, scale: Scale, width: number): number {
 }
 
 /** Row of the phone: the voice as a strip 8 high, the song's marks hanging below it, 4 to 13 long. */
-export function VoiceStrip({ voice, marks, scale, width = 120, spelling = "sharps", summary }: VoiceStripProps) {
+export function VoiceStrip({ voice, marks, scale, width = 120, spelling = "common", summary }: VoiceStripProps) {
   const id = useDrawingId();
   const x = (midi: number) => stripX(midi, scale, width);
   const half = width / (scale.high - scale.low + 1) / 2;

@@ -132,7 +132,7 @@ function beyondWords(marks: readonly KeyMark[], voice: SingingVoice, spelling: S
 export function ladderWords(
   voice: SingingVoice | null,
   marks: readonly KeyMark[],
-  spelling: Spelling = "sharps",
+  spelling: Spelling = "common",
 ): string {
   const parts: string[] = [];
   if (voice) {

@@ -7,6 +7,7 @@ import { SongEntity } from "../songs/song.entity";
 import { TakeEntity } from "../voices/take.entity";
 import { VoiceEntity } from "../voices/voice.entity";
 import { FirstTables1764547200000 } from "./migrations/FirstTables1764547200000";
+import { KindOfTake1767225600000 } from "./migrations/KindOfTake1767225600000";
 
 const common: Pick<
   Extract<DataSourceOptions, { type: "postgres" }>,
@@ -46,7 +47,7 @@ export function createMigrationSource(url: string): DataSource {
     poolSize: 1,
     connectTimeoutMS: 3000,
     poolErrorHandler: () => undefined,
-    migrations: [FirstTables1764547200000],
+    migrations: [FirstTables1764547200000, KindOfTake1767225600000],
     migrationsTransactionMode: "all",
   });
 }

@@ -72,7 +72,7 @@ export const demoPeople: readonly DemoPerson[] = [
         ],
       },
     ],
-    instrument: { presetId: "box-adf", name: "The cigar box" },
+    instrument: { presetId: "box-adf", name: "Box guitar" },
   },
   {
     name: "Nils Arden",

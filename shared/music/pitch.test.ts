@@ -17,7 +17,7 @@ test("the table of frequencies holds both ways, and so do the names", () => {
   for (const { name, midi, hz } of table) {
     expect(Math.abs(midiToHz(midi) - hz)).toBeLessThanOrEqual(0.0005001);
     expect(hzToMidi(hz)).toBeCloseTo(midi, 3);
-    expect(noteName(midi)).toBe(name);
+    expect(noteName(midi, "sharps")).toBe(name);
     expect(parseNoteName(name)).toBe(midi);
   }
 });
@@ -64,4 +64,9 @@ describe("glyphs", () => {
   ])("sets %s as %s", (plain, set) => {
     expect(glyphs(plain)).toBe(set);
   });
+});
+
+test("a note that stands in no key goes by its commonest name", () => {
+  const names = [61, 63, 66, 68, 70, 60].map((midi) => noteName(midi, "common"));
+  expect(names).toEqual(["C#4", "Eb4", "F#4", "Ab4", "Bb4", "C4"]);
 });

@@ -3,8 +3,11 @@ import { Note } from "tonal";
 /** A note as people write it: spelled with ASCII accidentals ("F#4", "Bb3"), octave numbers with C4 = middle C. */
 export type NoteName = string;
 
-/** Which accidentals to prefer where a pitch has two common names. */
-export type Spelling = "sharps" | "flats";
+/** How to name the five black keys: by sharps, by flats, or, where no key decides, by their commonest names. */
+export type Spelling = "sharps" | "flats" | "common";
+
+/** C# Eb F# Ab Bb: common practice for a note that stands in no key. */
+const commonlySharp = new Set([1, 6]);
 
 /**
  * Frequency of a MIDI note number in equal temperament.
@@ -40,16 +43,17 @@ export function hzToMidi(hz: number, a4 = 440): number {
  * Name of the nearest semitone.
  *
  * @param midi MIDI note number; fractions are rounded to the nearest semitone
- * @param spelling which accidental to use for the five black keys
+ * @param spelling how to name the five black keys
  * @returns ASCII name with octave, C4 = middle C
  * @throws RangeError if midi is not finite
  * @see ANSI/ASA S1.1 (standard octaves)
  * @example noteName(66, "flats") // => "Gb4"
  */
-export function noteName(midi: number, spelling: Spelling = "sharps"): NoteName {
+export function noteName(midi: number, spelling: Spelling = "common"): NoteName {
   if (!Number.isFinite(midi)) throw new RangeError("midi must be finite");
   const whole = Math.round(midi);
-  return spelling === "sharps" ? Note.fromMidiSharps(whole) : Note.fromMidi(whole);
+  const sharp = spelling === "sharps" || (spelling === "common" && commonlySharp.has(pitchClass(whole)));
+  return sharp ? Note.fromMidiSharps(whole) : Note.fromMidi(whole);
 }
 
 /**

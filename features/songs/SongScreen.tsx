@@ -87,7 +87,7 @@ export function SongScreen({ song, target, card, decided, keys, ways, use, onRem
   if (wide) {
     const three = width >= threeColumnsFrom;
     return (
-      <Screen {...screen} subtitle={headWords(song)} actions={<WideActions id={song.id} use={use} />}>
+      <Screen {...screen} subtitle={headWords(song, target?.decided ? targetSign : null)} actions={<WideActions id={song.id} use={use} />}>
         <View
           style={webStyle({
             display: "grid",

@@ -36,6 +36,7 @@ test("beat and tempo in words", () => {
   expect(beatWords(shelf[0]!)).toBe("3 beats, 92");
   expect(beatWords({ beatsPerBar: 1, tempo: null })).toBe("1 beat");
   expect(beatWords({ beatsPerBar: null, tempo: null })).toBeNull();
-  expect(headWords(shelf[0]!)).toBe("Written in B♭ minor · 3 beats in a bar, 92 a minute");
-  expect(headWords(song("x", "", { beatsPerBar: null, tempo: null }))).toBe("Written in B♭ minor");
+  expect(headWords(shelf[0]!, null)).toBe("Written in B♭ minor · 3 beats in a bar, 92 a minute");
+  expect(headWords(song("x", "", { beatsPerBar: null, tempo: null }), null)).toBe("Written in B♭ minor");
+  expect(headWords(song("x", "", { beatsPerBar: null, tempo: null }), "Cm")).toBe("Your key Cm, written in B♭ minor");
 });

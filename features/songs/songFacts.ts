@@ -27,9 +27,15 @@ export function beatWords(song: Pick<Song, "beatsPerBar" | "tempo">): string | n
   return parts.length === 0 ? null : parts.join(", ");
 }
 
-/** The line of facts under the title on a wide screen. */
-export function headWords(song: Song): string {
-  const key = song.writtenKey === null ? "No key yet" : `Written in ${glyphs(keyWords(song.writtenKey))}`;
+/** The line of facts under the title on a wide screen; `mine` is the decided key as one says it. */
+export function headWords(song: Song, mine: string | null): string {
+  const written = song.writtenKey && glyphs(keyWords(song.writtenKey));
+  const key =
+    written === null
+      ? "No key yet"
+      : mine === null
+        ? `Written in ${written}`
+        : `Your key ${mine}, written in ${written}`;
   const beats =
     song.beatsPerBar === null ? null : `${song.beatsPerBar} ${song.beatsPerBar === 1 ? "beat" : "beats"} in a bar`;
   const tempo = song.tempo === null ? null : `${song.tempo} a minute`;

@@ -28,10 +28,12 @@ export interface LiveFrame {
  * at most the last 15 s; in all else it is the same.
  *
  * @param sampleRate in Hz, 8000 to 192000
- * @returns push(pcm): mono samples in [-1, 1], any length; gives the frames decided by them, in order, one per 10 ms
+ * @returns push(pcm): mono samples in [-1, 1], any length; gives the frames decided by them, in order, one per 10 ms;
+ *   ahead(): the frames measured but not yet decided (up to 12, in order, after the decided ones), as they look now;
+ *   later sound may still change them
  * @throws RangeError if the rate is outside 8-192 kHz
  */
-export function createLiveTracker(sampleRate: number): { push(pcm: Float32Array): LiveFrame[] } {
+export function createLiveTracker(sampleRate: number): { push(pcm: Float32Array): LiveFrame[]; ahead(): LiveFrame[] } {
   const resampler = createResampler(sampleRate);
   const measure = createLagMeter();
   const measureShort = createLagMeter(SHORT_WINDOW);
@@ -74,6 +76,13 @@ export function createLiveTracker(sampleRate: number): { push(pcm: Float32Array)
       }
       sound = joined.slice(from);
       return out;
+    },
+    ahead() {
+      return waiting.map((frame, k) => {
+        const point = finder.decide(waiting.length - 1 - k);
+        const { hz, clarity, levelDb } = trackFrame(frame, point?.candidate ?? null);
+        return { t: (decided + k) / 100, hz, clarity, levelDb };
+      });
     },
   };
 }

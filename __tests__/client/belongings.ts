@@ -20,6 +20,8 @@ export const aVoice = (change: Partial<Voice> = {}): Voice => ({
 export const aTake = (voiceId: string, change: Partial<Take> = {}): Take => ({
   id: nextId(),
   voiceId,
+  kind: "phrase",
+  shows: "both",
   sungAt: when,
   warmedUp: null,
   effort: 2,

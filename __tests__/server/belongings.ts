@@ -15,6 +15,8 @@ export function aTake(voiceId: string, changes: Partial<Take> = {}): Take {
   return {
     id: randomUUID(),
     voiceId,
+    kind: "hold",
+    shows: "low",
     sungAt: instant,
     warmedUp: false,
     effort: 2,

@@ -16,7 +16,7 @@ const tables = async () => {
 
 it("runs every migration once, also when four servers start at the same moment", async () => {
   await Promise.all([1, 2, 3, 4].map(() => migrate(database.url)));
-  expect(await applied()).toEqual([{ name: "FirstTables1764547200000" }]);
+  expect(await applied()).toEqual([{ name: "FirstTables1764547200000" }, { name: "KindOfTake1767225600000" }]);
   expect(await tables()).toContain("songs");
 });
 
@@ -27,10 +27,29 @@ it("leaves data alone when it runs again", async () => {
   expect(await database.query("SELECT email FROM users")).toEqual([{ email: "a@orlow-quay.example" }]);
 });
 
-it("can be taken back", async () => {
+it("makes phrases of the takes that were kept before guided holds existed", async () => {
   await migrate(database.url);
   const source = await createMigrationSource(database.url).initialize();
   try {
+    await source.undoLastMigration();
+    await database.query(`
+      WITH person AS (INSERT INTO users (email, password_hash) VALUES ('a@orlow-quay.example', 'none') RETURNING id),
+      voice AS (INSERT INTO voices (id, user_id, name, created_at) SELECT gen_random_uuid(), id, 'My voice', now() FROM person RETURNING id, user_id)
+      INSERT INTO takes (id, user_id, voice_id, sung_at, duration_s, range, comfort, estimate, tuning_cents, certainty, reasons, notes)
+      SELECT gen_random_uuid(), user_id, id, now(), 9, '{}', '{}', '{}', 0, 0.8, '[]', '[]' FROM voice`);
+    await source.runMigrations();
+  } finally {
+    await source.destroy();
+  }
+  expect(await database.query("SELECT kind, shows FROM takes")).toEqual([{ kind: "phrase", shows: "both" }]);
+});
+
+it("can be taken back, one after the other", async () => {
+  await migrate(database.url);
+  const source = await createMigrationSource(database.url).initialize();
+  try {
+    await source.undoLastMigration();
+    expect(await tables()).toContain("takes");
     await source.undoLastMigration();
   } finally {
     await source.destroy();

@@ -7,6 +7,8 @@ const voice: Voice = { id: "v1", name: "My voice", byHand: null, createdAt: "202
 const take = (id: string, change: Partial<Take> = {}): Take => ({
   id,
   voiceId: "v1",
+  kind: "phrase",
+  shows: "both",
   sungAt: "2026-11-05T19:20:00.000Z",
   warmedUp: null,
   effort: null,

@@ -1,14 +1,15 @@
 import type { Take } from "@/shared/contract/take";
 import type { Voice } from "@/shared/contract/voice";
 import type { SingingVoice } from "@/shared/keys/keyScore";
-import { mergeTakes, type ProfileTake, type VoiceProfile } from "@/shared/voice/voiceProfile";
 import type { PitchBand } from "@/shared/voice/takeReport";
+import { voiceOfTakes, type ShownTake } from "@/shared/voice/voiceOfTakes";
+import type { VoiceProfile } from "@/shared/voice/voiceProfile";
 import { inTune } from "./takeOfHeard";
 
 /** What the takes of one voice say together; null where it has none. Takes of other voices are left out. */
 export function profileOf(voice: Pick<Voice, "id">, takes: readonly Take[]): VoiceProfile | null {
   const own = takes.filter((take) => take.voiceId === voice.id);
-  return own.length === 0 ? null : mergeTakes(own.map(profileTake));
+  return own.length === 0 ? null : voiceOfTakes(own.map(shownTake));
 }
 
 /** The voice as the key scorer needs it: notes set by hand, else what the takes say, else null. Comfort lies inside range. */
@@ -19,14 +20,17 @@ export function singingVoiceOf(voice: Voice, takes: readonly Take[]): SingingVoi
   return { range, comfort: within(known.comfort, range) };
 }
 
-function profileTake(take: Take): ProfileTake {
-  const { id, sungAt, certainty, effort, tuningCents } = take;
+/** A take as the engine merges it, its notes named by the singer's own tuning. */
+export function shownTake(take: Take): ShownTake {
+  const { id, sungAt, certainty, effort, tuningCents, kind, shows } = take;
   const band = (sung: PitchBand) => inTune(sung, tuningCents);
   return {
     id,
     sungAt,
     certainty,
     effort,
+    hold: kind === "hold",
+    shows,
     range: band(take.range),
     comfort: band(take.comfort),
     estimate: band(take.estimate),

@@ -20,6 +20,8 @@ export function takeOfHeard(heard: HeardTake, voiceId: string): Take {
   return {
     id,
     voiceId,
+    kind: "phrase",
+    shows: "both",
     sungAt,
     warmedUp,
     effort,

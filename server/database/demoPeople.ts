@@ -8,6 +8,8 @@ export interface DemoPerson {
   voice: string;
   /** what they sang, oldest first; notes as [MIDI number, seconds] */
   takes: {
+    /** a sung phrase unless said otherwise */
+    kind?: "phrase" | "hold";
     sungAt: string;
     warmedUp: boolean;
     effort: number;
@@ -69,6 +71,26 @@ export const demoPeople: readonly DemoPerson[] = [
           [71, 0.7],
           [72, 0.9],
           [67, 0.8],
+        ],
+      },
+      {
+        kind: "hold",
+        sungAt: "2026-11-28T09:40:00.000Z",
+        warmedUp: true,
+        effort: 3,
+        comfort: [55, 69],
+        sung: [
+          [62, 1.8],
+          [60, 1.7],
+          [58, 1.7],
+          [56, 1.6],
+          [54, 1.4],
+          [53, 1.1],
+          [64, 1.8],
+          [66, 1.7],
+          [68, 1.6],
+          [70, 1.4],
+          [72, 1],
         ],
       },
     ],

@@ -10,7 +10,7 @@ import { scoreKeys } from "../../shared/keys/scoreKeys";
 import { chartChords, parseChart } from "../../shared/songs/chart";
 import { demoSongs } from "../../shared/songs/demoSongs";
 import { readMelodyFile } from "../../shared/songs/melodyFile";
-import { mergeTakes } from "../../shared/voice/voiceProfile";
+import { voiceOfTakes } from "../../shared/voice/voiceOfTakes";
 import { findWays } from "../../shared/ways/findWays";
 import { hashPassword } from "../auth/passwords";
 import { UserEntity } from "../auth/user.entity";
@@ -80,7 +80,7 @@ async function move(manager: EntityManager, person: DemoPerson, passwordHash: st
   );
 }
 
-function toTake(voiceId: string, { sungAt, warmedUp, effort, comfort, sung }: DemoPerson["takes"][number]): Take {
+function toTake(voiceId: string, { kind = "phrase", sungAt, warmedUp, effort, comfort, sung }: DemoPerson["takes"][number]): Take {
   let at = 0.4;
   const notes = sung.map(([midi, seconds], k) => {
     const start = round(at);
@@ -102,13 +102,15 @@ function toTake(voiceId: string, { sungAt, warmedUp, effort, comfort, sung }: De
   return {
     id: randomUUID(),
     voiceId,
+    kind,
+    shows: "both",
     sungAt,
     warmedUp,
     effort,
     durationS: round(at + 0.4),
     range,
     comfort: { lowMidi: comfort[0], highMidi: comfort[1] },
-    estimate: { lowMidi: range.lowMidi - 1, highMidi: range.highMidi + 2 },
+    estimate: kind === "hold" ? range : { lowMidi: range.lowMidi - 1, highMidi: range.highMidi + 2 },
     tuningCents: -6,
     certainty: 0.84,
     reasons: [`Heard clearly in ${believed.length} of ${notes.length} notes.`],
@@ -141,7 +143,7 @@ function toSong(demo: (typeof demoSongs)[number], createdAt: string): Song {
 
 /** The engine's own answer for this voice and instrument, so that the demonstration shows what the product says. */
 function decide(song: Song, voice: Voice, takes: Take[], instrument: OwnInstrument): Decision | null {
-  const profile = mergeTakes(takes);
+  const profile = voiceOfTakes(takes.map((take) => ({ ...take, hold: take.kind === "hold" })));
   const { tune, writtenKey } = song;
   if (!profile || !tune || !writtenKey) return null;
   const [key] = scoreKeys(tune, profile, { mode: writtenKey.mode, presentKey: writtenKey.tonic });

@@ -7,6 +7,12 @@ export class TakeEntity extends OwnedEntity implements Take {
   @Column({ type: "uuid", name: "voice_id" })
   voiceId!: string;
 
+  @Column({ type: "text" })
+  kind!: Take["kind"];
+
+  @Column({ type: "text" })
+  shows!: Take["shows"];
+
   @Column({ type: "timestamptz", name: "sung_at", transformer: isoInstant })
   sungAt!: string;
 

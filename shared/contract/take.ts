@@ -14,6 +14,10 @@ const sungNote = z.strictObject({
 export const take = z.strictObject({
   id: z.uuid(),
   voiceId: z.uuid(),
+  /** a sung phrase, or single notes held one by one under guidance */
+  kind: z.enum(["phrase", "hold"]).default("phrase"),
+  /** which ends of the voice it speaks for; a guided hold may have looked for one only */
+  shows: z.enum(["both", "low", "high"]).default("both"),
   sungAt: z.iso.datetime(),
   warmedUp: z.boolean().nullable(),
   /** how it felt: 1 easy to 5 straining */

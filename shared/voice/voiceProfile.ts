@@ -33,7 +33,7 @@ export interface VoiceProfile {
 /** One take without another near its end may move an end of the range by at most this much beyond the rest, in semitones. */
 export const MOST_BY_ONE_TAKE = 4;
 /** A take loses half its weight in this many days against the newest one. */
-const HALF_LIFE_DAYS = 180;
+export const HALF_LIFE_DAYS = 180;
 const TRUSTED = 0.6;
 /** A trusted guided hold decides an end of the range against phrases that went at most this much farther, in semitones. */
 const HOLD_WINS_WITHIN = 2;

@@ -75,6 +75,15 @@ const commands = {
     const args = [...typescript, path.join(root, "server", "cli", "engine.ts"), ...process.argv.slice(3)];
     await together([{ args, env: {}, cwd: process.env.INIT_CWD }]);
   },
+
+  async "bench:voice"() {
+    await ensurePackages({ root, say });
+    const programs = ["praat", "aubio-tools", "fluidsynth", "fluid-soundfont-gm", "espeak-ng", "ffmpeg"];
+    const absent = ensureDebianPackages(programs, say);
+    if (absent.length > 0) say(`Not to be had here, so what needs them is left out: ${absent.join(", ")}`);
+    const args = [...typescript, path.join(root, "__tests__", "bench", "voiceBench.ts"), ...process.argv.slice(3)];
+    await together([{ args, env: {} }]);
+  },
 };
 
 /** The database that the environment names, else one of our own on loopback. */

@@ -1,0 +1,28 @@
+import type { ClipTruth } from "./corpusLine";
+import { createRandom, type Random } from "./random";
+
+export type CorpusHalf = "dev" | "held-out";
+/** All clips are made at this rate, in Hz. */
+export const CORPUS_RATE = 44100;
+
+export interface ClipSound {
+  pcm: Float32Array;
+  sampleRate: number;
+  truth: ClipTruth;
+}
+
+/** One recording of the corpus, made when it is asked for and always the same. */
+export interface Clip {
+  name: string;
+  half: CorpusHalf;
+  tags: string[];
+  /** null where a program that it needs is not installed */
+  make(): ClipSound | null;
+}
+
+/** Random numbers that depend on nothing but a clip's name and half. */
+export function clipRandom(half: CorpusHalf, name: string): Random {
+  let hash = 2166136261;
+  for (const letter of `${half}/${name}`) hash = Math.imul(hash ^ letter.charCodeAt(0), 16777619);
+  return createRandom(hash);
+}

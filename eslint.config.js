@@ -13,7 +13,7 @@ module.exports = defineConfig([
       ".expo/**",
       ".data/**",
       "node_modules/**",
-      "public/worklets/takeWorker.js",
+      "public/worklets/*Worker.js",
       "expo-env.d.ts",
     ],
   },

@@ -14,24 +14,27 @@ config.resolver.resolveRequest = (context, name, platform) =>
     : (inherited ?? context.resolveRequest)(context, name, platform);
 
 // Metro moves modules that a worker shares with a page into the page's chunk, where the worker cannot reach them.
-const takeWorker = "/worklets/takeWorker.js";
-const bundleTakeWorker = () =>
+const workers = {
+  "/worklets/takeWorker.js": "features/voice/recorder/takeWorker.ts",
+  "/worklets/guidedWorker.js": "features/voice/guided/guidedWorker.ts",
+};
+const bundleWorker = (address) =>
   esbuild.buildSync({
     absWorkingDir: __dirname,
-    entryPoints: ["features/voice/recorder/takeWorker.ts"],
-    outfile: path.join("public", takeWorker),
+    entryPoints: [workers[address]],
+    outfile: path.join("public", address),
     bundle: true,
     minify: true,
     format: "iife",
     target: ["es2022"],
     logLevel: "error",
   });
-bundleTakeWorker();
+for (const address of Object.keys(workers)) bundleWorker(address);
 
 // In development /api goes to the Express server, so that the client needs no base address in either mode.
 const apiPort = process.env.API_PORT ?? "8401";
 config.server.enhanceMiddleware = (metro) => (req, res, next) => {
-  if (req.url === takeWorker) bundleTakeWorker();
+  if (Object.hasOwn(workers, req.url)) bundleWorker(req.url);
   if (!req.url.startsWith("/api/")) return metro(req, res, next);
   const onward = http.request(
     { host: "127.0.0.1", port: apiPort, path: req.url, method: req.method, headers: req.headers },

@@ -9,7 +9,7 @@ import { locked } from "./postgres.mjs";
 const sources = ["app", "features", "shared", "assets", "fonts", "public"];
 const configs = ["package-lock.json", "app.json", "metro.config.js", "babel.config.js", "tsconfig.json"];
 /** Made by metro.config.js from the sources. */
-const made = path.join("public", "worklets", "takeWorker.js");
+const made = ["takeWorker.js", "guidedWorker.js"].map((file) => path.join("public", "worklets", file));
 const packed = /\.(js|css|html|svg|json|map|txt|webmanifest)$/;
 
 /** Exports the client unless dist/ was built from the very same sources; returns the folder. */
@@ -64,7 +64,7 @@ function fingerprint(root) {
     ...configs,
     ...sources.flatMap((dir) => walk(path.join(root, dir)).map((file) => path.join(dir, file))),
   ];
-  for (const file of files.filter((name) => name !== made && !/\.test\.tsx?$/.test(name)).sort()) {
+  for (const file of files.filter((name) => !made.includes(name) && !/\.test\.tsx?$/.test(name)).sort()) {
     hash
       .update(file)
       .update("\0")

@@ -1,0 +1,128 @@
+import type { TryOutcome } from "./guidedHold";
+import { beforeGuided, guidedSteps, shownEnds, type GuidedEvent, type GuidedState } from "./guidedSteps";
+
+const start = (change: Partial<GuidedEvent & { kind: "start" }> = {}): GuidedEvent => ({
+  kind: "start",
+  id: "g1",
+  startedAt: "2026-11-28T09:40:00.000Z",
+  home: 57,
+  under16: false,
+  ...change,
+});
+const held = (midi: number): TryOutcome => ({ kind: "held", note: { midi, heldS: 1.6, steadinessCents: 12 } });
+const unsteady: TryOutcome = { kind: "unsteady" };
+const after = (events: GuidedEvent[], from: GuidedState = beforeGuided) => events.reduce(guidedSteps, from);
+const runOf = (state: GuidedState) => {
+  if (!("run" in state)) throw new Error(`no run in ${state.step}`);
+  return state.run;
+};
+
+/** A singer who can hold all notes from `low` to `high`; walks until the machine waits for a decision or is done. */
+function walk(state: GuidedState, low: number, high: number): { state: GuidedState; asked: number[] } {
+  const asked: number[] = [];
+  for (let guard = 0; guard < 200; guard += 1) {
+    const { step } = state;
+    if (step === "tone") state = guidedSteps(state, { kind: "toneEnded" });
+    else if (step === "listening") state = guidedSteps(state, { kind: "listened" });
+    else if (step === "judging") {
+      const target = runOf(state).target ?? 57;
+      asked.push(target);
+      state = guidedSteps(state, { kind: "judged", outcome: target >= low && target <= high ? held(target) : unsteady });
+    } else if (step === "held") state = guidedSteps(state, { kind: "next" });
+    else if (step === "missed") state = guidedSteps(state, { kind: "again" });
+    else return { state, asked };
+  }
+  throw new Error("does not end");
+}
+
+const begun = () => after([start(), { kind: "opened" }]);
+
+test("the way goes down in whole tones, tries a missed note once more, then its semitone once", () => {
+  const { state, asked } = walk(begun(), 50, 70);
+  expect(state.step).toBe("turn");
+  expect(asked).toEqual([57, 55, 53, 51, 49, 49, 50]);
+});
+
+test("a note that was held is never asked for again on its way", () => {
+  const { asked } = walk(begun(), 51, 70);
+  expect(asked).toEqual([57, 55, 53, 51, 49, 49, 50]);
+});
+
+test("then it goes up from the same note, and what was found is sorted into held and for singing", () => {
+  const turned = walk(begun(), 50, 70).state;
+  const { state, asked } = walk(guidedSteps(turned, { kind: "up" }), 50, 70);
+  expect(asked).toEqual([59, 61, 63, 65, 67, 69, 71, 71, 70]);
+  expect(state).toMatchObject({
+    step: "done",
+    brokenOff: null,
+    findings: { lowMidi: 50, highMidi: 70, singLow: 52, singHigh: 67, effort: null },
+  });
+  expect(shownEnds(runOf(state))).toEqual(["low", "high"]);
+});
+
+test("under 16 the first miss ends an end: nothing is pushed", () => {
+  const { state, asked } = walk(after([start({ under16: true }), { kind: "opened" }]), 50, 70);
+  expect(state.step).toBe("turn");
+  expect(asked).toEqual([57, 55, 53, 51, 49]);
+});
+
+test("without a known voice the singer hums a comfortable note first, and both ways start from it", () => {
+  const listening = after([start({ home: null }), { kind: "opened" }]);
+  expect(listening.step).toBe("listening");
+  const found = after([{ kind: "listened" }, { kind: "judged", outcome: held(52.2) }], listening);
+  expect(runOf(found).home).toBe(52);
+  expect(runOf(guidedSteps(found, { kind: "next" })).target).toBe(50);
+});
+
+test("who sings a neighbour of the note asked for goes on from what was really sung", () => {
+  const far = after([{ kind: "toneEnded" }, { kind: "listened" }, { kind: "judged", outcome: held(57) }, { kind: "next" }, { kind: "toneEnded" }, { kind: "listened" }, { kind: "judged", outcome: held(54.1) }, { kind: "next" }], begun());
+  expect(runOf(far).target).toBe(52);
+});
+
+test("a try in which nothing could be heard is no try of the voice", () => {
+  const silent: TryOutcome = { kind: "unheard", why: "too-quiet" };
+  const missed = after([{ kind: "toneEnded" }, { kind: "listened" }, { kind: "judged", outcome: silent }], begun());
+  expect(missed).toMatchObject({ step: "missed", run: { tries: 0, target: 57 } });
+});
+
+test("enough at any moment keeps what was held, and finishing leaves the other end unsaid", () => {
+  const down = after([{ kind: "toneEnded" }, { kind: "listened" }, { kind: "judged", outcome: held(57) }, { kind: "next" }, { kind: "toneEnded" }, { kind: "listened" }, { kind: "judged", outcome: held(55) }], begun());
+  const turned = guidedSteps(down, { kind: "enough" });
+  expect(turned.step).toBe("turn");
+  const done = guidedSteps(turned, { kind: "finish" });
+  expect(done).toMatchObject({ step: "done", findings: { lowMidi: 55, highMidi: 57 } });
+  expect(shownEnds(runOf(done))).toEqual(["low"]);
+  expect(guidedSteps(begun(), { kind: "finish" })).toEqual(beforeGuided);
+});
+
+test("a microphone that is taken away keeps what was held, and says so where nothing was", () => {
+  const one = after([{ kind: "toneEnded" }, { kind: "listened" }, { kind: "judged", outcome: held(57) }], begun());
+  const two = after([{ kind: "next" }, { kind: "toneEnded" }, { kind: "listened" }, { kind: "judged", outcome: held(55) }], one);
+  expect(guidedSteps(two, { kind: "interrupted", cause: "unplugged" })).toMatchObject({ step: "done", brokenOff: "unplugged" });
+  expect(guidedSteps(one, { kind: "interrupted", cause: "unplugged" })).toEqual({ step: "failed", why: "unplugged" });
+  expect(guidedSteps(one, { kind: "finish" })).toEqual({ step: "failed", why: "nothing" });
+  expect(guidedSteps(begun(), { kind: "interrupted", cause: "taken" })).toEqual({ step: "failed", why: "taken" });
+  expect(after([start(), { kind: "unavailable", why: "refused" }])).toEqual({ step: "failed", why: "refused" });
+});
+
+test("the ways end where notes can no longer be heard surely", () => {
+  const { state, asked } = walk(begun(), 0, 127);
+  expect(Math.min(...asked)).toBe(37);
+  expect(Math.max(...walk(guidedSteps(state, { kind: "up" }), 0, 127).asked)).toBe(87);
+});
+
+test("notes for a song stay among the held ones and in order, whatever is asked for", () => {
+  const turned = walk(begun(), 50, 70).state;
+  const done = walk(guidedSteps(turned, { kind: "up" }), 50, 70).state;
+  const wild = after([{ kind: "found", change: { singHigh: 99 } }, { kind: "found", change: { singLow: 80 } }], done);
+  expect(wild).toMatchObject({ findings: { singLow: 70, singHigh: 70 } });
+});
+
+test("an event that makes no sense in a step changes nothing", () => {
+  const listening = guidedSteps(begun(), { kind: "toneEnded" });
+  for (const kind of ["opened", "toneEnded", "next", "again", "up"] as const) {
+    expect(guidedSteps(listening, { kind })).toBe(listening);
+  }
+  expect(guidedSteps(beforeGuided, { kind: "judged", outcome: held(57) })).toBe(beforeGuided);
+  expect(guidedSteps(listening, { kind: "leave" })).toEqual(beforeGuided);
+});

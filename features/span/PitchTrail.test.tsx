@@ -3,6 +3,7 @@ import { midiToHz } from "@/shared/music/pitch";
 import type { LiveFrame } from "@/shared/voice/liveTracker";
 import { LevelMeter, levelWord, litCells } from "./LevelMeter";
 import { PitchTrail } from "./PitchTrail";
+import { createTrailRun } from "./trailRun";
 import { glides, lean, offsetWords, strength, trailNotes, trailPoints, trailScale } from "./trailGeometry";
 
 /** Sings a note from `from` to `to` seconds, one frame in 10 ms, with a vibrato of so many cents to each side at 6 Hz. */
@@ -94,14 +95,58 @@ describe("the trail's lines", () => {
   });
 });
 
+describe("the trail while it grows", () => {
+  const song = [...sing(0, 1, 60), ...sing(1, 2, 64), ...rest(2, 2.4), ...sing(2.4, 3, 67)];
+
+  it("finds, block by block, the notes of the whole", () => {
+    const run = createTrailRun();
+    let trail = run({ frames: [], ahead: [], now: 0 });
+    for (let k = 4; k <= song.length; k += 4) {
+      trail = run({ frames: song.slice(0, k), ahead: song.slice(k, k + 12), now: k / 100 });
+    }
+    const whole = trailNotes(trailPoints(song, 3));
+    expect(trail.notes.map(({ line }) => line)).toEqual([60, 64, 67]);
+    trail.notes.forEach((note, k) => {
+      expect(note.start).toBeCloseTo(whole[k]?.start ?? -1, 1);
+      expect(note.end).toBeCloseTo(whole[k]?.end ?? -1, 1);
+    });
+  });
+
+  it("never makes a note again that is over", () => {
+    const run = createTrailRun();
+    const [first] = run({ frames: song.slice(0, 200), ahead: [], now: 2 }).notes;
+    expect(run({ frames: song, ahead: [], now: 3 }).notes[0]).toBe(first);
+  });
+
+  it("shows a pitch as soon as it was measured, before it is decided", () => {
+    const run = createTrailRun();
+    run({ frames: song.slice(0, 100), ahead: [], now: 1 });
+    const newest = run({ frames: song.slice(0, 100), ahead: song.slice(100, 103), now: 1.03 }).newest;
+    expect(newest?.midi).toBeCloseTo(64, 3);
+  });
+
+  it("lets go of what is older than six seconds, and begins again when time goes back", () => {
+    const run = createTrailRun();
+    run({ frames: song, ahead: [], now: 3 });
+    expect(run({ frames: song, ahead: [], now: 8.5 }).notes.map(({ line }) => line)).toEqual([67]);
+    expect(run({ frames: song.slice(0, 50), ahead: [], now: 0.5 }).notes.map(({ line }) => line)).toEqual([60]);
+  });
+});
+
 describe("PitchTrail", () => {
   it("says what sounds now", () => {
-    render(<PitchTrail frames={sing(0, 2, 64)} now={2} width={390} height={492} />);
+    render(<PitchTrail read={() => ({ frames: sing(0, 2, 64), ahead: [], now: 2 })} width={390} height={492} />);
     expect(screen.getByRole("img").getAttribute("aria-label")).toContain("Now: E4, on the line.");
   });
 
   it("says when nothing sounds, and has no open end then", () => {
-    const { container } = render(<PitchTrail frames={sing(0, 1, 64)} now={3} width={390} height={492} />);
+    const { container } = render(
+      <PitchTrail
+        read={() => ({ frames: [...sing(0, 1, 64), ...rest(1, 3)], ahead: [], now: 3 })}
+        width={390}
+        height={492}
+      />,
+    );
     expect(screen.getByRole("img").getAttribute("aria-label")).toContain("Nothing is sounding now.");
     expect(container.querySelectorAll("circle")).toHaveLength(0);
   });

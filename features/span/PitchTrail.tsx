@@ -1,221 +1,148 @@
-import { useRef } from "react";
-import Svg, { Circle, G, Line, Path, Rect } from "react-native-svg";
+import { useEffect, useRef, useState } from "react";
+import { View } from "react-native";
+import Svg, { Circle, Rect } from "react-native-svg";
 import { glyphs, noteName } from "@/shared/music/pitch";
-import type { LiveFrame } from "@/shared/voice/liveTracker";
 import { SvgLabel } from "@/features/ui/SvgLabel";
-import { colors, mixtures } from "@/features/ui/theme";
+import { colors } from "@/features/ui/theme";
+import { webStyle } from "@/features/ui/webStyle";
 import { ground } from "./Hatch";
-import { isNatural } from "./ladderGeometry";
+import { stretchS, TrailBars } from "./TrailBars";
+import { TrailGrid } from "./TrailGrid";
 import {
-  glides,
-  lean,
   offsetWords,
-  strength,
-  trailNotes,
-  trailPoints,
+  trailPace,
   trailScale,
   trailSeconds,
+  trailX,
+  trailY,
   type TrailNote,
-  type TrailPoint,
+  type TrailPlace,
 } from "./trailGeometry";
+import { createTrailRun, type Trail, type TrailMoment } from "./trailRun";
 
 export interface PitchTrailProps {
-  /** of the live tracker, oldest first; older ones than 6 s are passed over */
-  frames: readonly LiveFrame[];
-  /** seconds, on the clock of the frames */
-  now: number;
+  /** asked whenever the picture is drawn, which is at the pace of the screen */
+  read: () => TrailMoment;
   width: number;
   height: number;
   /** lines shown; follows the singing unless told otherwise */
   scale?: { low: number; high: number };
-  /** frozen after the take: without the open end */
-  frozen?: boolean;
   testID?: string;
 }
 
-/** The last 6 s: bars on note lines that lean where the singing was flat or sharp, and the glides between them. */
-export function PitchTrail({ frames, now, width, height, scale, frozen = false, testID }: PitchTrailProps) {
+/** Where people want no motion, the trail moves on only so often. */
+const calmMs = 250;
+/** Bars come into sight and go out of it at the left edge of the lines. */
+const clipLeft = 44;
+
+/**
+ * The last 6 s: bars on note lines that lean where the singing was flat or sharp, and the glides between them. Three
+ * layers: the lines stand still, the bars are drawn as notes change and moved on as time goes, the open end comes last.
+ */
+export function PitchTrail({ read, width, height, scale, testID }: PitchTrailProps) {
+  const [run] = useState(createTrailRun);
   const followed = useRef<{ low: number; high: number } | null>(null);
-  const points = trailPoints(frames, now);
-  const shown = scale ?? trailScale(points, followed.current);
-  followed.current = shown;
-  const notes = trailNotes(points);
+  const [{ trail, now }, setDrawn] = useState(() => moment(read, run));
+  const layer = useRef<View>(null);
+  const startS = Math.floor(now / stretchS) * stretchS;
+  const start = useRef(startS);
 
-  const left = 52;
-  const nowX = width - 44;
-  const foot = 38;
-  const step = (height - foot - 10) / (shown.high - shown.low);
-  const x = (t: number) => nowX - ((now - t) * (nowX - left)) / trailSeconds;
-  const y = (midi: number) => 8 + (shown.high - midi) * step;
-  const axis = height - 24;
-  const lines = Array.from({ length: shown.high - shown.low + 1 }, (_, index) => shown.high - index);
-  const last = notes[notes.length - 1];
-  const sounding = last !== undefined && now - last.end < 0.25 ? last : null;
-  const newest = points[points.length - 1];
+  const shown =
+    scale ??
+    trailScale(
+      trail.notes.map(({ end: t, midi }) => ({ t, midi })),
+      followed.current,
+    );
+  const place: TrailPlace = { width, height, low: shown.low, high: shown.high };
+  const shift = (at: number, from: number) => trailX(place)(from - at) - clipLeft;
+  useEffect(() => {
+    followed.current = shown;
+    start.current = startS;
+  });
 
+  useEffect(() => {
+    const calm = window.matchMedia?.("(prefers-reduced-motion: reduce)").matches ?? false;
+    const x = trailX({ width });
+    let last = performance.now();
+    let seen = "";
+    let handle = requestAnimationFrame(function draw(atMs) {
+      handle = requestAnimationFrame(draw);
+      if (calm && atMs - last < calmMs) return;
+      last = atMs;
+      const next = moment(read, run);
+      const element = layer.current as unknown as HTMLElement | null;
+      if (element) element.style.transform = `translateX(${x(start.current - next.now) - clipLeft}px)`;
+      const sign = signOf(next);
+      if (sign !== seen) setDrawn(next);
+      seen = sign;
+    });
+    return () => cancelAnimationFrame(handle);
+  }, [read, run, width]);
+
+  const last = trail.notes.at(-1) ?? null;
+  const sounding = last && trail.newest && trail.newest.t - last.end < 0.25 ? last : null;
   return (
-    <Svg
-      width={width}
-      height={height}
-      viewBox={`0 0 ${width} ${height}`}
+    <View
       role="img"
       aria-label={trailWords(sounding)}
       {...(testID === undefined ? null : { testID })}
-      style={{ display: "flex" }}
+      style={{ width, height }}
     >
-      {lines.map((midi) => (
-        <TrailLine
-          key={midi}
-          midi={midi}
-          y={y(midi)}
-          width={width}
-          names={step >= 13 || midi % 12 === 0 || step * 2 >= 13}
-        />
-      ))}
-      {Array.from({ length: trailSeconds + 1 }, (_, ago) => (
-        <G key={ago}>
-          <Line
-            x1={x(now - ago)}
-            x2={x(now - ago)}
-            y1={axis}
-            y2={axis + 5}
-            stroke={colors.inkSoft}
-            strokeOpacity={0.6}
-            strokeWidth={1}
-          />
-          {ago % 2 === 0 && (
-            <SvgLabel x={x(now - ago)} y={axis + 19} size={12} anchor="middle">
-              {ago === 0 ? "now" : `${ago} s ago`}
-            </SvgLabel>
-          )}
-        </G>
-      ))}
-      <Path
-        d={glides(notes)
-          .map(({ from, to }) =>
-            glidePath(x(from.end), y(from.midi) + tilt(from, x), x(to.start), y(to.midi) - tilt(to, x)),
-          )
-          .join("")}
-        fill="none"
-        stroke={colors.inkSoft}
-        strokeOpacity={0.75}
-        strokeWidth={1.5}
-      />
-      {notes.map((note) => (
-        <TrailBar key={note.start} note={note} points={points} x={x} y={y} now={now} />
-      ))}
-      <Line
-        x1={nowX}
-        x2={nowX}
-        y1={0}
-        y2={axis}
-        stroke={colors.inkSoft}
-        strokeOpacity={0.7}
-        strokeWidth={1}
-        strokeDasharray="2 4"
-      />
-      {!frozen && sounding && newest && <OpenEnd x={nowX} y={y(sounding.midi)} />}
+      <TrailGrid {...place} />
+      <View style={{ position: "absolute", left: clipLeft, right: 0, top: 0, bottom: 0, overflow: "hidden" }}>
+        <View
+          ref={layer}
+          style={[
+            { position: "absolute", left: 0, top: 0, width: trailPace(place) * stretchS, height },
+            webStyle({ transform: `translateX(${shift(now, startS)}px)`, willChange: "transform" }),
+          ]}
+        >
+          <TrailBars {...place} notes={trail.notes} startS={startS} now={now} />
+        </View>
+      </View>
+      {trail.newest && (
+        <OpenEnd x={trailX(place)(0)} y={trailY(place, clamped(endOf(trail, sounding), shown))} height={height} />
+      )}
+    </View>
+  );
+}
+
+function moment(read: () => TrailMoment, run: ReturnType<typeof createTrailRun>): { trail: Trail; now: number } {
+  const at = read();
+  return { trail: run(at), now: at.now };
+}
+
+/** Changes when there is something new to draw; mere passing of time only moves the layer. */
+function signOf({ trail: { notes, newest }, now }: { trail: Trail; now: number }): string {
+  const last = notes.at(-1);
+  const end = newest ? `${newest.t}/${Math.round(newest.midi * 20)}` : "";
+  return `${notes.length} ${notes[0]?.start} ${last?.start} ${last?.end} ${end} ${Math.floor(now)}`;
+}
+
+/** The open end stands on its bar while the pitch stays near it, and goes ahead where the pitch has left. */
+function endOf({ newest }: Trail, sounding: TrailNote | null): number {
+  const pitch = newest?.midi ?? 0;
+  return sounding && Math.abs(sounding.midi - pitch) < 0.7 ? sounding.midi : pitch;
+}
+
+function clamped(midi: number, { low, high }: { low: number; high: number }): number {
+  return Math.max(low, Math.min(high, midi));
+}
+
+function OpenEnd({ x, y, height }: { x: number; y: number; height: number }) {
+  return (
+    <Svg
+      width={28}
+      height={height}
+      viewBox={`-14 0 28 ${height}`}
+      aria-hidden
+      style={{ position: "absolute", left: x - 14, top: 0 }}
+    >
+      <Circle cx={0} cy={y} r={13} fill={ground} />
+      <Circle cx={0} cy={y} r={11.5} fill="none" stroke={colors.plum} strokeWidth={1.75} />
+      <Circle cx={0} cy={y} r={6} fill={colors.plum} />
     </Svg>
   );
-}
-
-function TrailLine({ midi, y, width, names }: { midi: number; y: number; width: number; names: boolean }) {
-  const natural = isNatural(midi);
-  const octave = midi % 12 === 0;
-  return (
-    <G>
-      <Line
-        x1={48}
-        x2={width}
-        y1={y}
-        y2={y}
-        stroke={octave ? mixtures.rungC : colors.line}
-        strokeWidth={1}
-        {...(natural ? null : { strokeDasharray: "1 7", strokeLinecap: "round" as const })}
-      />
-      {natural && names && (
-        <SvgLabel
-          x={40}
-          y={y + 4.5}
-          size={13}
-          family="display"
-          weight="600"
-          anchor="end"
-          fill={octave ? colors.ink : colors.inkSoft}
-        >
-          {noteName(midi)}
-        </SvgLabel>
-      )}
-    </G>
-  );
-}
-
-interface TrailBarProps {
-  note: TrailNote;
-  points: readonly TrailPoint[];
-  x: (t: number) => number;
-  y: (midi: number) => number;
-  now: number;
-}
-
-/** One steady note: a bar 12 thick, leaning by its cents, with the sung line drawn in it. */
-function TrailBar({ note, points, x, y, now }: TrailBarProps) {
-  const middle = (x(note.start) + x(note.end)) / 2;
-  const angle = lean(note.cents);
-  const long = Math.max(14, (x(note.end) - x(note.start) + 8) / Math.cos((angle * Math.PI) / 180));
-  const slope = Math.tan((angle * Math.PI) / 180);
-  const sung = points
-    .filter((point) => point.t >= note.start && point.t <= note.end)
-    .filter((_, index) => index % 2 === 0)
-    .map((point) => {
-      const along = x(point.t) - middle;
-      const off = Math.max(-4.5, Math.min(4.5, (note.midi - point.midi) * 9));
-      return `${(middle + along).toFixed(1)} ${(y(note.midi) + along * slope + off).toFixed(1)}`;
-    });
-  return (
-    <G>
-      <G transform={`translate(${middle} ${y(note.midi)}) rotate(${angle})`}>
-        <Rect
-          x={-long / 2}
-          y={-6}
-          width={long}
-          height={12}
-          rx={6}
-          fill={`color-mix(in srgb,var(--lagoon) ${strength(note.end, now)}%,${ground})`}
-        />
-      </G>
-      {sung.length > 1 && (
-        <Path
-          d={`M${sung.join("L")}`}
-          fill="none"
-          stroke={ground}
-          strokeWidth={1.25}
-          strokeOpacity={0.85}
-          strokeLinejoin="round"
-        />
-      )}
-    </G>
-  );
-}
-
-function OpenEnd({ x, y }: { x: number; y: number }) {
-  return (
-    <G>
-      <Circle cx={x} cy={y} r={13} fill={ground} />
-      <Circle cx={x} cy={y} r={11.5} fill="none" stroke={colors.plum} strokeWidth={1.75} />
-      <Circle cx={x} cy={y} r={6} fill={colors.plum} />
-    </G>
-  );
-}
-
-/** How far the end of a leaning bar stands below its middle. */
-function tilt(note: TrailNote, x: (t: number) => number): number {
-  return ((x(note.end) - x(note.start)) / 2) * Math.tan((lean(note.cents) * Math.PI) / 180);
-}
-
-function glidePath(x1: number, y1: number, x2: number, y2: number): string {
-  const bend = (x2 - x1) * 0.5;
-  return `M${x1.toFixed(1)} ${y1.toFixed(1)}C${(x1 + bend).toFixed(1)} ${y1.toFixed(1)} ${(x2 - bend).toFixed(1)} ${y2.toFixed(1)} ${x2.toFixed(1)} ${y2.toFixed(1)}`;
 }
 
 function trailWords(sounding: TrailNote | null): string {

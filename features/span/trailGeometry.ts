@@ -14,6 +14,8 @@ export interface TrailNote {
   midi: number;
   /** cents off the line, -50 to 50 */
   cents: number;
+  /** what was sung in it, smoothed */
+  points: readonly TrailPoint[];
 }
 
 /** One sounding point of the trail. */
@@ -55,7 +57,7 @@ export function trailNotes(points: readonly TrailPoint[]): TrailNote[] {
     if (first && last && last.t - first.t >= shortestS) {
       const midi = sum / run.length;
       const line = Math.round(midi);
-      notes.push({ start: first.t, end: last.t, line, midi, cents: (midi - line) * 100 });
+      notes.push({ start: first.t, end: last.t, line, midi, cents: (midi - line) * 100, points: run });
     }
     run = [];
     sum = 0;
@@ -115,4 +117,31 @@ export function glides(notes: readonly TrailNote[]): { from: TrailNote; to: Trai
     const from = notes[index - 1];
     return from && to.start - from.end < 0.25 ? [{ from, to }] : [];
   });
+}
+
+/** Where the trail is drawn: its size in px and the lines it shows. */
+export interface TrailPlace {
+  width: number;
+  height: number;
+  low: number;
+  high: number;
+}
+
+/** Left of the first second, and right of now. */
+export const trailMargins = { left: 52, right: 44 } as const;
+
+/** Px for one second. */
+export function trailPace({ width }: Pick<TrailPlace, "width">): number {
+  return (width - trailMargins.right - trailMargins.left) / trailSeconds;
+}
+
+/** The place of a moment so many seconds from now (negative: before). */
+export function trailX(place: Pick<TrailPlace, "width">): (fromNow: number) => number {
+  const pace = trailPace(place);
+  return (fromNow) => place.width - trailMargins.right + fromNow * pace;
+}
+
+/** The height at which a pitch stands. */
+export function trailY({ height, low, high }: TrailPlace, midi: number): number {
+  return 8 + ((high - midi) * (height - 48)) / (high - low);
 }

@@ -1,19 +1,22 @@
-import { View } from "react-native";
+import { Pressable, View } from "react-native";
 import { Button } from "@/features/ui/Button";
-import { LinkButton } from "@/features/ui/LinkButton";
 import { LiveText } from "@/features/ui/LiveText";
 import { Notice } from "@/features/ui/Notice";
 import { Screen } from "@/features/ui/Screen";
 import { Text } from "@/features/ui/Text";
+import { colors } from "@/features/ui/theme";
+import { useCountInSetting } from "./countInSetting";
+import { OtherWays } from "./OtherWays";
 
 export interface BeforeSingingProps {
   /** the browser is asking whether the page may listen */
   asking: boolean;
-  onSing: () => void;
+  onSing: (counted: boolean) => void;
 }
 
 /** What will happen, how to sing, and the button that starts it. */
 export function BeforeSinging({ asking, onSing }: BeforeSingingProps) {
+  const [counted, setCounted] = useCountInSetting();
   return (
     <Screen
       title="Sing a few seconds"
@@ -24,10 +27,10 @@ export function BeforeSinging({ asking, onSing }: BeforeSingingProps) {
             icon="mic"
             label={asking ? "Waiting for the microphone" : "Start singing"}
             busy={asking}
-            onPress={onSing}
+            onPress={() => onSing(counted)}
             testID="sing-start"
           />
-          <LinkButton kind="text" label="Set notes by hand" href="/voice/by-hand" testID="sing-by-hand" />
+          <OtherWays kind="text" />
         </>
       }
     >
@@ -36,12 +39,49 @@ export function BeforeSinging({ asking, onSing }: BeforeSingingProps) {
           Sing any song you know for 5 to 20 seconds, without an instrument, and see which notes are yours.
         </Text>
         <Text tone="soft">The sound stays on this device. Only numbers are kept, and only if you say so.</Text>
+        <CountInSwitch on={counted} onChange={setCounted} />
         <Cautions />
         <LiveText variant="small" tone="soft">
           {asking ? "Your browser asks whether this page may use the microphone. Choose to allow it." : ""}
         </LiveText>
       </View>
     </Screen>
+  );
+}
+
+function CountInSwitch({ on, onChange }: { on: boolean; onChange: (on: boolean) => void }) {
+  return (
+    <Pressable
+      role="switch"
+      aria-checked={on}
+      onPress={() => onChange(!on)}
+      testID="count-in"
+      style={{ flexDirection: "row", alignItems: "center", gap: 12, minHeight: 48 }}
+    >
+      <View
+        style={{
+          width: 46,
+          height: 26,
+          borderRadius: 13,
+          borderWidth: 1.5,
+          borderColor: on ? colors.plum : colors.inkSoft,
+          backgroundColor: on ? colors.plum : "transparent",
+          justifyContent: "center",
+          alignItems: on ? "flex-end" : "flex-start",
+          paddingHorizontal: 3,
+        }}
+      >
+        <View
+          style={{ width: 17, height: 17, borderRadius: 9, backgroundColor: on ? colors.onPlum : colors.inkSoft }}
+        />
+      </View>
+      <View style={{ flexShrink: 1 }}>
+        <Text variant="label">Count me in</Text>
+        <Text variant="small" tone="soft">
+          Four clicks, also to be seen, before the listening begins.
+        </Text>
+      </View>
+    </Pressable>
   );
 }
 

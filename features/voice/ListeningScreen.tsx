@@ -1,4 +1,4 @@
-import { useEffect, useRef, useState } from "react";
+import { useCallback, useEffect, useRef, useState } from "react";
 import { Pressable, useWindowDimensions, View } from "react-native";
 import { LevelMeter } from "@/features/span/LevelMeter";
 import { PitchTrail, TrailLegend } from "@/features/span/PitchTrail";
@@ -7,11 +7,11 @@ import { Screen } from "@/features/ui/Screen";
 import { Text } from "@/features/ui/Text";
 import { colors, mixtures, sizes } from "@/features/ui/theme";
 import { useLayout } from "@/features/ui/useLayout";
-import { noteNow } from "./noteNow";
+import { noteNow, type NoteNow } from "./noteNow";
 import { noteWord } from "./noteWords";
 import { timeOf, type LiveSound } from "./recorder/liveSound";
 import { enoughTakeS, longestTakeS } from "./recorder/takeProtocol";
-import { useDrawTick } from "./useDrawTick";
+import { useHeard } from "./useHeard";
 
 export interface ListeningScreenProps {
   live: LiveSound;
@@ -26,8 +26,8 @@ const aroundTrail = 56 + 72 + 224;
 /** Level and time are read at a glance, also on a wide page. */
 const widestRows = 600;
 
-/** The tracker decides a frame this much later; the trail's end waits for it, so that bar and dot stay together. */
-const lookAheadS = 0.16;
+/** What is measured ends this long before the sound does: half a window, and the block on its way. */
+const behindS = 0.045;
 
 /** While singing: the note, the trail, how loud and how long, and Stop under the thumb. */
 export function ListeningScreen({ live, seconds, stopping, onStop }: ListeningScreenProps) {
@@ -52,8 +52,9 @@ export function ListeningScreen({ live, seconds, stopping, onStop }: ListeningSc
 }
 
 function NoteWords({ live }: { live: LiveSound }) {
-  useDrawTick(100);
-  const note = noteNow(live.frames);
+  // Only what is shown: the note, its words and its tenths of a second.
+  const shown = useHeard(live, noteSign);
+  const note = shown === "" ? null : noteOf(live);
   return (
     <View style={{ flexDirection: "row", alignItems: "center", gap: 16, paddingTop: 8, minHeight: 60 }}>
       <Text
@@ -77,28 +78,37 @@ function NoteWords({ live }: { live: LiveSound }) {
   );
 }
 
+/** A note that is not decided yet is shown all the same: the singer hears it now. */
+function noteOf({ frames, ahead }: LiveSound): NoteNow | null {
+  return noteNow([...frames, ...ahead]);
+}
+
+function noteSign(live: LiveSound): string {
+  const note = noteOf(live);
+  return note ? `${note.midi} ${note.words} ${note.heldS.toFixed(1)}` : "";
+}
+
 function LiveTrail({ live, height }: { live: LiveSound; height: number }) {
-  const nowMs = useDrawTick();
   const [width, setWidth] = useState(0);
+  const read = useCallback(
+    () => ({
+      frames: live.frames,
+      ahead: live.ahead,
+      now: Math.max(0, timeOf(live, performance.now()) - behindS),
+    }),
+    [live],
+  );
   return (
     <View onLayout={({ nativeEvent }) => setWidth(nativeEvent.layout.width)} style={{ height }}>
-      {width > 0 && (
-        <PitchTrail
-          frames={live.frames}
-          now={Math.max(0, timeOf(live, nowMs) - lookAheadS)}
-          width={width}
-          height={height}
-          testID="pitch-trail"
-        />
-      )}
+      {width > 0 && <PitchTrail read={read} width={width} height={height} testID="pitch-trail" />}
     </View>
   );
 }
 
 function LiveLevel({ live }: { live: LiveSound }) {
-  useDrawTick(100);
-  // A cut-off peak is too loud, however soft the block around it.
-  return <LevelMeter levelDb={live.peak >= 0.99 ? 0 : live.levelDb} />;
+  // A cut-off peak is too loud, however soft the block around it. The meter shows steps of 2.5 dB.
+  const levelDb = useHeard(live, ({ peak, levelDb: now }) => (peak >= 0.99 ? 0 : Math.round(now / 2.5) * 2.5));
+  return <LevelMeter levelDb={levelDb} />;
 }
 
 function TimeRow({ seconds }: { seconds: number }) {

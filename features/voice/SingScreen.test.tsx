@@ -7,8 +7,8 @@ import { shelf } from "@/features/api/shelf";
 import { midiToHz } from "@/shared/music/pitch";
 import type { TakeReport } from "@/shared/voice/takeReport";
 import { MicrophoneUnavailable, openMicrophone } from "./recorder/microphone";
-import type { Interruption, Unavailable } from "./recorder/recorder";
-import type { FromTakeWorker, ToTakeWorker } from "./recorder/takeProtocol";
+import type { Interruption, Processing, Unavailable } from "./recorder/recorder";
+import type { FromTakeWorker, TakePart, ToTakeWorker } from "./recorder/takeProtocol";
 import { SingScreen } from "./SingScreen";
 
 jest.mock("idb-keyval", () => jest.requireActual<{ memoryIdb: object }>("@/__tests__/client/memoryIdb").memoryIdb);
@@ -70,10 +70,19 @@ const report: TakeReport = {
   certainty: 0.7,
   reasons: ["Heard clearly in 1 of 1 note."],
 };
-const judged = (change: Partial<TakeReport> = {}) =>
-  answer({ kind: "judged", report: { ...report, ...change }, pcm: new Float32Array(8), sampleRate: 48_000 });
+const judged = (change: Partial<TakeReport> = {}, part: TakePart | null = null) =>
+  answer({
+    kind: "judged",
+    report: { ...report, ...change },
+    pcm: new Float32Array(9 * 48_000),
+    sampleRate: 48_000,
+    part,
+  });
 
 let interrupt: (cause: Interruption) => void = () => undefined;
+let beat: (left: number) => void = () => undefined;
+let comeIn: () => void = () => undefined;
+const mockMicrophone: { processed: Processing[] } = { processed: [] };
 beforeEach(async () => {
   localStorage.clear();
   new FakeApi().install();
@@ -82,12 +91,25 @@ beforeEach(async () => {
   refuseStorage(null);
   Object.assign(mockUnkept, { mark: null, take: null });
   mockWorker.told = [];
+  mockMicrophone.processed = [];
   const port = { close: () => undefined };
   Object.assign(globalThis, { MessageChannel: jest.fn(() => ({ port1: port, port2: port })) });
   Object.assign(window, { scrollTo: () => undefined });
-  jest.mocked(openMicrophone).mockImplementation(async (_sound, onInterrupted) => {
+  jest.mocked(openMicrophone).mockImplementation(async (onInterrupted) => {
     interrupt = onInterrupted;
-    return { sampleRate: 48_000, processed: [], finish: async () => true, close: () => undefined };
+    return {
+      sampleRate: 48_000,
+      processed: mockMicrophone.processed,
+      countIn: (onBeat) => {
+        beat = onBeat;
+        return new Promise<void>((resolve) => {
+          comeIn = resolve;
+        });
+      },
+      listen: () => undefined,
+      finish: async () => true,
+      close: () => undefined,
+    };
   });
 });
 
@@ -110,7 +132,7 @@ async function open() {
 async function sing() {
   await press("sing-start");
   const frames = Array.from({ length: 50 }, (_, k) => ({ t: k / 100, hz: midiToHz(64), clarity: 0.9, levelDb: -20 }));
-  await answer({ kind: "heard", frames, seconds: 4.4, levelDb: -20, peak: 0.2 });
+  await answer({ kind: "heard", frames, ahead: [], seconds: 4.4, levelDb: -20, peak: 0.2 });
 }
 
 it("leads from the caution through listening to the result, and keeps it as My voice", async () => {
@@ -120,7 +142,7 @@ it("leads from the caution through listening to the result, and keeps it as My v
   expect(screen.getByTestId("take-seconds").textContent).toBe("4 s");
   await press("sing-stop");
   await judged();
-  expect(mockWorker.told).toEqual(["begin", "judge"]);
+  expect(mockWorker.told).toEqual(["warmUp", "begin", "judge"]);
   expect(screen.getByTestId("comfort-notes").textContent).toContain("G3 to A4");
   await keep();
   await waitFor(() => expect(onKept).toHaveBeenCalledWith("voice"));
@@ -176,6 +198,61 @@ it("keeps what was sung before a call took the microphone", async () => {
   await judged();
   expect(screen.getByTestId("take-broken-off").textContent).toContain("A call or another program took the microphone");
   expect(screen.getByTestId("comfort-notes")).toBeTruthy();
+});
+
+it("counts in where that is wanted, and gives the take up on Not yet", async () => {
+  await open();
+  expect(screen.getByTestId("count-in").getAttribute("aria-checked")).toBe("false");
+  await press("count-in");
+  await press("sing-start");
+  await act(async () => beat(4));
+  expect(screen.getByTestId("count-left").textContent).toBe("4");
+  await press("count-cancel");
+  expect(mockWorker.told).not.toContain("begin");
+  expect(screen.getByTestId("count-in").getAttribute("aria-checked")).toBe("true");
+  await press("sing-start");
+  await act(async () => beat(1));
+  await act(async () => comeIn());
+  expect(screen.getByTestId("sing-stop")).toBeTruthy();
+  expect(mockWorker.told).toContain("begin");
+});
+
+it("says what the browser did to the sound although it was asked not to", async () => {
+  mockMicrophone.processed = ["echo cancellation", "noise suppression"];
+  await open();
+  await sing();
+  await press("sing-stop");
+  await judged();
+  expect(screen.getByTestId("take-processed").textContent).toContain("echo cancellation and noise suppression");
+});
+
+it("leaves out a part by the keys, shows its notes, and goes back to the whole", async () => {
+  await open();
+  await sing();
+  await press("sing-stop");
+  await judged();
+  const start = screen.getByTestId("trim-start");
+  expect(start.getAttribute("aria-valuetext")).toBe("0.0 seconds");
+  for (let k = 0; k < 3; k += 1) await act(async () => fireEvent.keyDown(start, { key: "PageUp" }));
+  expect(start.getAttribute("aria-valuetext")).toBe("3.0 seconds");
+  await waitFor(() => expect(mockWorker.told.at(-1)).toBe("judgeKept"));
+  await judged({ range: band(57, 72), comfort: band(59, 69) }, { startS: 3, endS: 9 });
+  expect(screen.getByTestId("comfort-notes").textContent).toContain("B3 to A4");
+  expect(screen.getByTestId("take-part").textContent).toContain("From 3.0 to 9.0 s of 9.0 s");
+  await press("take-whole");
+  expect(screen.getByTestId("comfort-notes").textContent).toContain("G3 to A4");
+});
+
+it("keeps the take as it was where too little is left between the handles", async () => {
+  await open();
+  await sing();
+  await press("sing-stop");
+  await judged();
+  await act(async () => fireEvent.keyDown(screen.getByTestId("trim-end"), { key: "Home" }));
+  await waitFor(() => expect(mockWorker.told.at(-1)).toBe("judgeKept"));
+  await judged({ verdict: "too-short", sentence: "That was too short.", range: null }, { startS: 0, endS: 2 });
+  expect(screen.getByTestId("take-part-refused").textContent).toContain("That was too short. The take is as it was.");
+  expect(screen.getByTestId("comfort-notes").textContent).toContain("G3 to A4");
 });
 
 it("shows the result again after a reload", async () => {

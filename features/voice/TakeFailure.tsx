@@ -2,11 +2,11 @@ import { View } from "react-native";
 import { Button } from "@/features/ui/Button";
 import { Card } from "@/features/ui/Card";
 import { Icon } from "@/features/ui/Icon";
-import { LinkButton } from "@/features/ui/LinkButton";
 import { Screen } from "@/features/ui/Screen";
 import { Text } from "@/features/ui/Text";
 import { colors } from "@/features/ui/theme";
 import { failureWords } from "./failureWords";
+import { OtherWays } from "./OtherWays";
 import type { Failure } from "./recorder/recorder";
 
 export interface TakeFailureProps {
@@ -17,14 +17,19 @@ export interface TakeFailureProps {
 /** No range came out: why, what is safe, and the two ways on. */
 export function TakeFailure({ failure, onAgain }: TakeFailureProps) {
   const words = failureWords(failure);
+  const file = failure.stoppedBy === "file";
   return (
     <Screen
       title={words.title}
       crumb={{ label: "Voice", href: "/voice" }}
       footer={
         <>
-          <Button icon="again" label="Try again" onPress={onAgain} testID="sing-again" />
-          <LinkButton kind="secondary" label="Set notes by hand" href="/voice/by-hand" testID="sing-by-hand" />
+          {file ? (
+            <Button icon="file" label="Choose another recording" onPress={onAgain} testID="sing-again" />
+          ) : (
+            <Button icon="again" label="Try again" onPress={onAgain} testID="sing-again" />
+          )}
+          <OtherWays kind="secondary" recording={!file} />
         </>
       }
     >

@@ -1,5 +1,5 @@
+import type { ReactNode } from "react";
 import { Pressable, View } from "react-native";
-import { Button } from "@/features/ui/Button";
 import { Heading } from "@/features/ui/Heading";
 import { Icon } from "@/features/ui/Icon";
 import { Notice } from "@/features/ui/Notice";
@@ -12,7 +12,6 @@ import { causeWords, isInterruption } from "./failureWords";
 import { NoteDots } from "./NoteDots";
 import { bandWords, certaintyWords } from "./noteWords";
 import type { HeardTake } from "./recorder/recorder";
-import { usePlayback } from "./recorder/usePlayback";
 import { inTune } from "./takeOfHeard";
 import { timeOnNotes } from "./timeOnNotes";
 import { VoiceLadder } from "./VoiceLadder";
@@ -24,10 +23,12 @@ export interface TakeResultProps {
   /** keeps the take and goes on to the songs */
   onSongs: () => void;
   onFelt: (warmedUp: boolean | null, effort: number | null) => void;
+  /** the take as it was sung */
+  trail: ReactNode;
 }
 
 /** What a take says: notes, how sure, why, what next. On a wide page the ladder stands left of the words. */
-export function TakeResult({ take, onAgain, onSongs, onFelt }: TakeResultProps) {
+export function TakeResult({ take, onAgain, onSongs, onFelt, trail }: TakeResultProps) {
   const wide = useLayout() === "wide";
   const { report } = take;
   if (!report.range || !report.comfort) return null;
@@ -37,7 +38,7 @@ export function TakeResult({ take, onAgain, onSongs, onFelt }: TakeResultProps) 
   };
   const heading = <BandHeading label="Your comfortable notes" band={voice.comfort} />;
   const ladder = <VoiceLadder voice={voice} times={timeOnNotes(report.notes, report.tuningCents)} ends="held" />;
-  const words = <ResultWords take={take} onAgain={onAgain} onSongs={onSongs} onFelt={onFelt} />;
+  const words = <ResultWords take={take} onAgain={onAgain} onSongs={onSongs} onFelt={onFelt} trail={trail} />;
   if (!wide) {
     return (
       <View style={{ gap: 14 }}>
@@ -58,7 +59,7 @@ export function TakeResult({ take, onAgain, onSongs, onFelt }: TakeResultProps) 
   );
 }
 
-function ResultWords({ take, onAgain, onSongs, onFelt }: TakeResultProps) {
+function ResultWords({ take, onAgain, onSongs, onFelt, trail }: TakeResultProps) {
   const { report, stoppedBy, processed } = take;
   const judged = report.notes.filter(
     ({ sustained, clear, start, end }) => sustained || clear || end - start >= 0.15,
@@ -85,7 +86,7 @@ function ResultWords({ take, onAgain, onSongs, onFelt }: TakeResultProps) {
           {`This browser kept ${listWords(processed)} on, which can swallow soft notes. Your range may be a little wider than shown.`}
         </Notice>
       )}
-      <PlayBack take={take} />
+      {trail}
       <AfterSinging warmedUp={take.warmedUp} effort={take.effort} onChange={onFelt} />
     </View>
   );
@@ -128,28 +129,6 @@ function Why({ take, certainty, reasons }: { take: HeardTake; certainty: number;
           {reason}
         </Text>
       ))}
-    </View>
-  );
-}
-
-function PlayBack({ take }: { take: HeardTake }) {
-  const { playing, failed, play, stop } = usePlayback(take.pcm, take.sampleRate);
-  return (
-    <View>
-      <View style={{ flexDirection: "row", alignItems: "center", gap: 12, flexWrap: "wrap" }}>
-        <Button
-          kind="secondary"
-          small
-          icon={playing ? "stop" : "play"}
-          label={playing ? "Stop playing" : "Play back"}
-          onPress={playing ? stop : () => void play()}
-          testID="take-play"
-        />
-        <Text variant="small" tone="soft" style={{ flexShrink: 1 }}>
-          The sound stays on this device.
-        </Text>
-      </View>
-      {failed && <Notice kind="error">This browser could not play the take. Its notes are safe.</Notice>}
     </View>
   );
 }

@@ -1,4 +1,5 @@
 import type { Failure, FailureKind, Interruption, StoppedBy } from "./recorder/recorder";
+import type { Refusal, SoundKind } from "./recorder/soundFile";
 
 export interface FailureWords {
   title: string;
@@ -27,7 +28,7 @@ export function causeWords(stoppedBy: Interruption, seconds: number): string {
 }
 
 export function isInterruption(stoppedBy: StoppedBy | null): stoppedBy is Interruption {
-  return stoppedBy !== null && stoppedBy !== "singer" && stoppedBy !== "full";
+  return stoppedBy !== null && stoppedBy !== "singer" && stoppedBy !== "full" && stoppedBy !== "file";
 }
 
 const titles: Record<FailureKind, string> = {
@@ -44,8 +45,14 @@ const titles: Record<FailureKind, string> = {
   clipped: "Too loud for the microphone",
   "not-singing": "No singing heard",
   "several-voices": "More than one voice",
+  "not-a-sound": "Not a sound file",
+  "unreadable-file": "This recording cannot be read",
+  "too-large": "This file is too large",
+  "too-long": "This recording is too long",
+  "empty-file": "This file is empty",
 };
 
+const kinds = "wav, mp3, m4a, ogg, webm or flac";
 const withoutSound = {
   refused: {
     happened: "Your browser was told not to let this page use the microphone.",
@@ -69,9 +76,38 @@ const withoutSound = {
   },
 } as const;
 
+const nothingRead = "Nothing was kept, the file is as it was, and it has not left this device.";
+const files: Record<Refusal, (file: SoundKind | null) => { happened: string; next: string }> = {
+  "not-a-sound": () => ({
+    happened: `What is in this file is not sound of a kind that is read here, whatever its name says: ${kinds}.`,
+    next: "Choose a recording of one of these kinds.",
+  }),
+  "unreadable-file": (file) => ({
+    happened: `It begins like ${file === null ? "a recording" : `${article(file)} ${file} file`}, but this browser could not turn it into sound: it is damaged, cut off or coded in a way the browser does not know.`,
+    next: "Save it again as wav or mp3, or choose another one.",
+  }),
+  "too-large": () => ({
+    happened: "Recordings up to 20 MB are read here.",
+    next: "Save only the singing, or save it as mp3, and choose that.",
+  }),
+  "too-long": () => ({
+    happened: "Recordings up to 10 minutes are read here.",
+    next: "Save only the part with the singing and choose that. 20 seconds are enough.",
+  }),
+  "empty-file": () => ({
+    happened: "There is no sound in it.",
+    next: "Choose another one.",
+  }),
+};
+
+function article(file: SoundKind): string {
+  return file === "mp3" || file === "m4a" || file === "ogg" ? "an" : "a";
+}
+
 /** What a failed take is called, what happened, what is safe and what to do. */
-export function failureWords({ kind, report, seconds, stoppedBy }: Failure): FailureWords {
+export function failureWords({ kind, report, seconds, stoppedBy, file = null }: Failure): FailureWords {
   const title = titles[kind];
+  if (kind in files) return { title, ...files[kind as Refusal](file), safe: nothingRead };
   if (kind in withoutSound) return { title, ...withoutSound[kind as keyof typeof withoutSound], safe: nothingRecorded };
   if (kind === "interrupted" && isInterruption(stoppedBy)) {
     const short = seconds > 0 ? " What you sang until then was not enough to read your notes from." : "";

@@ -35,3 +35,13 @@ it("is silent when nobody sings", () => {
   expect(noteNow([])).toBeNull();
   expect(noteNow(frames([...held(60, 50), ...Array.from({ length: 30 }, () => null)]))).toBeNull();
 });
+
+it("names a new note, even a semitone away, from its second frame on", () => {
+  expect(noteNow(frames([...held(60, 60), ...held(61, 1)]))?.midi).toBe(60);
+  expect(noteNow(frames([...held(60, 60), ...held(61, 2)]))?.midi).toBe(61);
+  expect(noteNow(frames([...held(60, 60), ...held(67, 2)]))?.midi).toBe(67);
+});
+
+it("passes over a single stray frame", () => {
+  expect(noteNow(frames([...held(60, 60), 72]))?.midi).toBe(60);
+});

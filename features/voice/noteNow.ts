@@ -14,17 +14,21 @@ export interface NoteNow {
 /** A breath or a consonant this short does not end a note. */
 const gapFrames = 8;
 const sameNoteSemitones = 0.6;
+/** Frames of the same note that its pitch is the middle of: about one period of a vibrato. */
 const recentFrames = 20;
+/** A pitch this far from the newest one belongs to another note; a semitone away always does. */
+const otherNoteSemitones = 0.8;
+/** A single stray frame names nothing. */
+const newestFrames = 3;
 
 /**
- * What is being sung at the end of `frames` (one per 10 ms), or null where nobody sings. Vibrato and a short breath do
- * not end a note: its pitch is the median of the last 0.2 s, and it is held as long as pitch stays within 60 cents.
+ * What is being sung at the end of `frames` (one per 10 ms), or null where nobody sings. A new note is named as soon as
+ * two frames hold it. Vibrato and a short breath do not end a note: its pitch is the median of its last 0.2 s, and it is
+ * held as long as pitch stays within 60 cents.
  */
 export function noteNow(frames: readonly LiveFrame[]): NoteNow | null {
-  const recent = frames.slice(-recentFrames).flatMap(({ hz }) => (hz === null ? [] : [hzToMidi(hz)]));
-  const last = frames.slice(-gapFrames).some(({ hz }) => hz !== null);
-  const centre = median(recent);
-  if (!last || centre === null) return null;
+  const centre = centreNow(frames);
+  if (centre === null) return null;
   let held = 0;
   let gap = 0;
   for (let k = frames.length - 1; k >= 0; k -= 1) {
@@ -39,6 +43,23 @@ export function noteNow(frames: readonly LiveFrame[]): NoteNow | null {
   const midi = Math.round(centre);
   const cents = Math.round(100 * (centre - midi));
   return { midi, cents, heldS: held / 100, words: wordsFor(cents) };
+}
+
+/** The newest pitch, smoothed over as much of the same note as has sounded without another one between. */
+function centreNow(frames: readonly LiveFrame[]): number | null {
+  const lately = frames.slice(-gapFrames).flatMap(({ hz }) => (hz === null ? [] : [hzToMidi(hz)]));
+  const newest = median(lately.slice(-newestFrames));
+  if (newest === null) return null;
+  const same: number[] = [];
+  let other = 0;
+  for (let k = frames.length - 1; k >= Math.max(0, frames.length - recentFrames) && other < newestFrames; k -= 1) {
+    const hz = frames[k]?.hz ?? null;
+    if (hz === null) continue;
+    const midi = hzToMidi(hz);
+    if (Math.abs(midi - newest) < otherNoteSemitones) same.push(midi);
+    else other += 1;
+  }
+  return median(same);
 }
 
 function wordsFor(cents: number): NoteNow["words"] {

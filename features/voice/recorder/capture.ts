@@ -2,8 +2,9 @@ import { newId } from "@/features/api/newId";
 import { hear, silence, type LiveSound } from "./liveSound";
 import { MicrophoneUnavailable, openMicrophone, type Microphone } from "./microphone";
 import { openTakeWorker } from "./openTakeWorker";
-import type { RecorderEvent } from "./recorder";
-import type { FromTakeWorker, ToTakeWorker } from "./takeProtocol";
+import type { HeardTake, RecorderEvent } from "./recorder";
+import { FileRefused, readSoundFile } from "./soundFile";
+import type { FromTakeWorker, TakePart, ToTakeWorker } from "./takeProtocol";
 import { beginUnkept, markTakeOfThisTab, type CutOffTake } from "./unkeptTake";
 
 /** No block for so long means that the sound has stopped without a word. */
@@ -12,12 +13,17 @@ const stallMs = 3000;
 const ticksPerS = 5;
 
 export interface Capture {
-  start(): Promise<void>;
+  /** Starts the worker before it is needed. */
+  warmUp(): void;
+  start(counted: boolean): Promise<void>;
   stop(): Promise<void>;
+  /** Reads and judges a recording. */
+  read(file: File): Promise<void>;
   judgeKept(cutOff: CutOffTake): void;
+  judgePart(take: HeardTake, part: TakePart): void;
   /** Lets go of the microphone and of the take. */
   drop(): void;
-  /** Ends the worker too. */
+  /** Ends the worker too, whatever it is doing. */
   close(): void;
 }
 
@@ -61,23 +67,27 @@ export function createCapture(emit: (event: RecorderEvent) => void, live: LiveSo
   };
 
   return {
-    async start() {
+    warmUp: () => tell({ kind: "warmUp" }),
+    async start(counted) {
       release();
       silence(live);
       tick = 0;
       const mine = round;
-      const { port1, port2 } = new MessageChannel();
       try {
-        const opened = await openMicrophone(port1, (cause) => emit({ kind: "interrupted", cause }));
+        const opened = await openMicrophone((cause) => emit({ kind: "interrupted", cause }));
         if (mine !== round) {
           opened.close();
           return;
         }
         microphone = opened;
+        if (counted) await opened.countIn((left) => mine === round && emit({ kind: "beat", left }));
+        if (mine !== round) return;
         const take = { id: newId(), sungAt: new Date().toISOString() };
         markTakeOfThisTab(take.id);
         void beginUnkept({ ...take, sampleRate: opened.sampleRate }).catch(() => undefined);
+        const { port1, port2 } = new MessageChannel();
         tell({ kind: "begin", sampleRate: opened.sampleRate, sound: port2, keepAs: take.id }, [port2]);
+        opened.listen(port1);
         live.atMs = performance.now();
         watchdog = setInterval(() => {
           if (performance.now() - live.atMs > stallMs) emit({ kind: "interrupted", cause: "stalled" });
@@ -97,8 +107,29 @@ export function createCapture(emit: (event: RecorderEvent) => void, live: LiveSo
       emit({ kind: "flushed" });
       tell({ kind: "judge", endIsComing });
     },
+    async read(file) {
+      release();
+      const mine = round;
+      try {
+        const { pcm, sampleRate } = await readSoundFile(file);
+        if (mine !== round) return;
+        const sungAt = new Date(Math.min(Date.now(), file.lastModified)).toISOString();
+        const take = { id: newId(), sungAt };
+        markTakeOfThisTab(take.id);
+        emit({ kind: "decoded", ...take, seconds: pcm.length / sampleRate });
+        tell({ kind: "judgeKept", sampleRate, pcm, part: null }, [pcm.buffer]);
+      } catch (fault) {
+        if (mine !== round) return;
+        if (fault instanceof FileRefused) emit({ kind: "unusable", why: fault.why, file: fault.kind });
+        else emit({ kind: "broken" });
+      }
+    },
     judgeKept({ sampleRate, pcm }) {
-      tell({ kind: "judgeKept", sampleRate, pcm }, [pcm.buffer]);
+      tell({ kind: "judgeKept", sampleRate, pcm, part: null }, [pcm.buffer]);
+    },
+    judgePart({ pcm, sampleRate }, part) {
+      const sound = pcm.slice(Math.round(part.startS * sampleRate), Math.round(part.endS * sampleRate));
+      tell({ kind: "judgeKept", sampleRate, pcm: sound, part }, [sound.buffer]);
     },
     drop() {
       release();

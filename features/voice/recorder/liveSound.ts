@@ -4,30 +4,36 @@ import type { LiveFrame } from "@/shared/voice/liveTracker";
 const keptS = 6.6;
 
 /**
- * What is heard right now. It changes some 40 times a second, so it is read by whoever draws, at the pace of drawing,
- * and never passes through React's state.
+ * What is heard right now. It changes some 100 times a second, so it is read by whoever draws, at the pace of drawing,
+ * and never passes through the page's state.
  */
 export interface LiveSound {
   frames: LiveFrame[];
+  /** measured and not yet decided: what the next frames will probably be */
+  ahead: LiveFrame[];
   levelDb: number;
   peak: number;
   seconds: number;
   /** clock time in ms at which the last block arrived */
   atMs: number;
+  /** called whenever something was heard */
+  listeners: Set<() => void>;
 }
 
+const nothing = () => ({ frames: [], ahead: [], levelDb: -120, peak: 0, seconds: 0, atMs: 0 });
+
 export function createLiveSound(): LiveSound {
-  return { frames: [], levelDb: -120, peak: 0, seconds: 0, atMs: 0 };
+  return { ...nothing(), listeners: new Set() };
 }
 
 export function silence(live: LiveSound): void {
-  Object.assign(live, createLiveSound());
+  Object.assign(live, nothing());
 }
 
 /** Level and peak fall back slowly (about 20 dB a second), so that the words beside them can be read. */
 export function hear(
   live: LiveSound,
-  heard: { frames: LiveFrame[]; seconds: number; levelDb: number; peak: number },
+  heard: { frames: LiveFrame[]; ahead: LiveFrame[]; seconds: number; levelDb: number; peak: number },
   atMs: number,
 ): void {
   const passed = Math.max(0, heard.seconds - live.seconds);
@@ -35,9 +41,15 @@ export function hear(
   live.peak = Math.max(heard.peak, live.peak * 10 ** -passed);
   live.seconds = heard.seconds;
   live.atMs = atMs;
-  const from = heard.seconds - keptS;
-  const firstKept = live.frames.findIndex((frame) => frame.t >= from);
-  live.frames = [...(firstKept > 0 ? live.frames.slice(firstKept) : live.frames), ...heard.frames];
+  live.ahead = heard.ahead;
+  live.frames.push(...heard.frames);
+  // One cut a second spares a copy with every block.
+  const oldest = live.frames[0];
+  if (oldest && oldest.t < heard.seconds - keptS - 1) {
+    const from = heard.seconds - keptS;
+    live.frames = live.frames.slice(live.frames.findIndex((frame) => frame.t >= from));
+  }
+  for (const listener of live.listeners) listener();
 }
 
 /** Seconds of the take at clock time `nowMs`: between two blocks time goes on, but never far ahead of the sound. */

@@ -1,3 +1,4 @@
+import { countIn } from "./countIn";
 import type { Interruption, Processing, Unavailable } from "./recorder";
 
 export class MicrophoneUnavailable extends Error {
@@ -10,6 +11,10 @@ export interface Microphone {
   sampleRate: number;
   /** what the browser does to the sound although it was asked not to */
   processed: Processing[];
+  /** Counts the singer in; ends early where the microphone is closed. */
+  countIn(onBeat: (left: number) => void): Promise<void>;
+  /** From here on the sound flows into `sound`, as `TakeSound`. */
+  listen(sound: MessagePort): void;
   /** Lets the last block through, then lets go of the microphone. False where the sound had broken off without an end. */
   finish(): Promise<boolean>;
   /** Lets go of the microphone at once. */
@@ -26,14 +31,11 @@ const names: Record<keyof typeof plainSound, Processing> = {
 const flushMs = 500;
 
 /**
- * Opens the microphone without voice processing and lets its sound flow into `sound`.
+ * Opens the microphone without voice processing. Its sound goes nowhere until `listen` says where to.
  *
  * @throws MicrophoneUnavailable with the reason
  */
-export async function openMicrophone(
-  sound: MessagePort,
-  onInterrupted: (cause: Interruption) => void,
-): Promise<Microphone> {
+export async function openMicrophone(onInterrupted: (cause: Interruption) => void): Promise<Microphone> {
   if (!window.isSecureContext) throw new MicrophoneUnavailable("insecure");
   if (!navigator.mediaDevices?.getUserMedia || typeof AudioWorkletNode === "undefined") {
     throw new MicrophoneUnavailable("unsupported");
@@ -51,21 +53,22 @@ export async function openMicrophone(
   try {
     await context.audioWorklet.addModule("/worklets/takeTap.js");
     if (context.state === "suspended") await context.resume();
-    const tap = new AudioWorkletNode(context, "take-tap", {
+    const node = new AudioWorkletNode(context, "take-tap", {
       numberOfOutputs: 1,
       channelCount: 1,
       channelCountMode: "explicit",
       channelInterpretation: "speakers",
     });
-    tap.port.postMessage({ kind: "connect", port: sound }, [sound]);
     // Some browsers only pull nodes that lead to the speakers; the tap writes nothing there.
-    context.createMediaStreamSource(stream).connect(tap).connect(context.destination);
+    context.createMediaStreamSource(stream).connect(node).connect(context.destination);
     watchFor(context, track, onInterrupted, watch.signal);
     return {
       sampleRate: context.sampleRate,
       processed: stillProcessed(track.getSettings()),
+      countIn: (onBeat) => countIn(context, onBeat, watch.signal),
+      listen: (sound) => node.port.postMessage({ kind: "connect", port: sound }, [sound]),
       close,
-      finish: () => flush(tap.port).finally(close),
+      finish: () => flush(node.port).finally(close),
     };
   } catch {
     close();

@@ -21,7 +21,7 @@ const silent = {
 
 const after = (events: RecorderEvent[], from: RecorderState = idle) => events.reduce(recorder, from);
 const listening: RecorderEvent[] = [{ kind: "ask" }, { kind: "opened", ...sung }, { kind: "heard", seconds: 4.2 }];
-const judged = (report: TakeReport): RecorderEvent => ({ kind: "judged", report, pcm, sampleRate: 48_000 });
+const judged = (report: TakeReport): RecorderEvent => ({ kind: "judged", report, pcm, sampleRate: 48_000, part: null });
 
 it("goes from the press to the result", () => {
   expect(after(listening.slice(0, 1)).step).toBe("asking");
@@ -78,6 +78,51 @@ it("judges what a reload cut off, or shows what was already judged", () => {
   expect(rejudged).toMatchObject({ step: "result", take: { id: "take-1", stoppedBy: "reloaded" } });
   if (rejudged.step !== "result") throw new Error("no result");
   expect(after([{ kind: "restored", take: rejudged.take }])).toEqual(rejudged);
+});
+
+it("reads a recording instead, or says why not", () => {
+  const reading = after([{ kind: "read", name: "evening.mp3" }]);
+  expect(reading).toEqual({ step: "reading", name: "evening.mp3" });
+  const decoded: RecorderEvent = { kind: "decoded", id: "take-2", sungAt: sung.sungAt, seconds: 31 };
+  expect(after([decoded, judged(heard)], reading)).toMatchObject({
+    step: "result",
+    take: { id: "take-2", stoppedBy: "file", processed: [] },
+  });
+  expect(after([decoded, judged(silent)], reading)).toMatchObject({
+    failure: { kind: "too-quiet", stoppedBy: "file" },
+  });
+  expect(after([{ kind: "unusable", why: "too-long", file: "mp3" }], reading)).toMatchObject({
+    step: "failure",
+    failure: { kind: "too-long", stoppedBy: "file", file: "mp3" },
+  });
+  expect(after([{ kind: "leave" }, decoded], reading)).toEqual(idle);
+});
+
+it("judges a part, keeps the whole beside it, and ignores an answer that nobody waits for", () => {
+  const result = after([...listening, { kind: "stop" }, { kind: "flushed" }, judged(heard)]);
+  const answer: RecorderEvent = {
+    kind: "judged",
+    report: { ...heard, sentence: "A part." },
+    pcm,
+    sampleRate: 48_000,
+    part: { startS: 1, endS: 4 },
+  };
+  expect(recorder(result, answer)).toBe(result);
+  const part = after([{ kind: "judgePart" }, answer], result);
+  expect(part).toMatchObject({ take: { report: { sentence: "A part." }, part: { startS: 1, whole: heard } } });
+  const other = after([{ kind: "judgePart" }, { ...answer, part: { startS: 2, endS: 4 } }], part);
+  expect(other).toMatchObject({ take: { part: { startS: 2, whole: heard } } });
+  expect(after([{ kind: "judgeWhole" }], other)).toEqual(result);
+});
+
+it("counts in before it listens, and gives up on a stop", () => {
+  const counting = after([{ kind: "ask" }, { kind: "beat", left: 4 }, { kind: "beat", left: 3 }]);
+  expect(counting).toEqual({ step: "counting", left: 3 });
+  expect(after([{ kind: "opened", ...sung }], counting).step).toBe("listening");
+  expect(after([{ kind: "stop" }], counting)).toEqual(idle);
+  expect(after([{ kind: "interrupted", cause: "taken" }], counting)).toMatchObject({
+    failure: { kind: "interrupted" },
+  });
 });
 
 it("remembers how it felt", () => {

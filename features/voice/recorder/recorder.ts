@@ -1,23 +1,32 @@
 import type { TakeReport, Verdict } from "@/shared/voice/takeReport";
-import { longestTakeS } from "./takeProtocol";
+import type { Refusal, SoundKind } from "./soundFile";
+import { longestTakeS, type TakePart } from "./takeProtocol";
 
 /** Why there is no microphone to listen to. */
 export type Unavailable = "refused" | "no-microphone" | "insecure" | "busy" | "unsupported";
 /** What broke a take off before the singer stopped it. */
 export type Interruption = "taken" | "unplugged" | "muted" | "hidden" | "stalled" | "reloaded";
-export type StoppedBy = "singer" | "full" | Interruption;
-export type FailureKind = Unavailable | Exclude<Verdict, "heard"> | "interrupted" | "broken";
+/** "file": nobody stopped it, it is a recording. */
+export type StoppedBy = "singer" | "full" | "file" | Interruption;
+export type FailureKind = Unavailable | Refusal | Exclude<Verdict, "heard"> | "interrupted" | "broken";
 
 /** Kinds of sound processing that the browser kept on although it was asked not to. */
 export type Processing = "echo cancellation" | "noise suppression" | "automatic gain";
+
+/** A part of a take that was judged instead of the whole; `whole` is what the whole was judged to be. */
+export interface JudgedPart extends TakePart {
+  whole: TakeReport;
+}
 
 /** A judged take that nobody has kept yet. The sound stays on this device. */
 export interface HeardTake {
   id: string;
   sungAt: string;
   report: TakeReport;
+  /** the whole sound, also where only a part was judged */
   pcm: Float32Array<ArrayBuffer>;
   sampleRate: number;
+  part?: JudgedPart;
   processed: Processing[];
   stoppedBy: StoppedBy;
   warmedUp: boolean | null;
@@ -37,29 +46,48 @@ export interface Failure {
   /** seconds that were recorded, 0 if none */
   seconds: number;
   stoppedBy: StoppedBy | null;
+  /** what the file is, where one could be told */
+  file?: SoundKind | null;
 }
 
 export type RecorderState =
   | { step: "idle" }
   | { step: "asking" }
+  /** the microphone is open, and the singer is counted in */
+  | { step: "counting"; left: number }
+  /** a file is turned into sound */
+  | { step: "reading"; name: string }
   | ({ step: "listening"; seconds: number } & Sung)
   | ({ step: "stopping"; stoppedBy: StoppedBy; seconds: number } & Sung)
   | ({ step: "judging"; stoppedBy: StoppedBy; seconds: number } & Sung)
-  | { step: "result"; take: HeardTake }
+  /** `judgingPart` while the worker reads a part of the take, `refusedPart` where too little was in it */
+  | { step: "result"; take: HeardTake; judgingPart: boolean; refusedPart: string | null }
   | { step: "failure"; failure: Failure };
 
 export type RecorderEvent =
   | { kind: "ask" }
+  | { kind: "beat"; left: number }
   | ({ kind: "opened" } & Sung)
   | { kind: "unavailable"; why: Unavailable }
   | { kind: "heard"; seconds: number }
   | { kind: "stop" }
   | { kind: "interrupted"; cause: Interruption }
   | { kind: "flushed" }
-  | { kind: "judged"; report: TakeReport; pcm: Float32Array<ArrayBuffer>; sampleRate: number }
+  | {
+      kind: "judged";
+      report: TakeReport;
+      pcm: Float32Array<ArrayBuffer>;
+      sampleRate: number;
+      part: TakePart | null;
+    }
   | { kind: "broken" }
   | { kind: "restored"; take: HeardTake }
   | { kind: "rejudging"; id: string; sungAt: string; seconds: number }
+  | { kind: "read"; name: string }
+  | { kind: "decoded"; id: string; sungAt: string; seconds: number }
+  | { kind: "unusable"; why: Refusal; file: SoundKind | null }
+  | { kind: "judgePart" }
+  | { kind: "judgeWhole" }
   | { kind: "felt"; warmedUp: boolean | null; effort: number | null }
   | { kind: "leave" };
 
@@ -76,10 +104,10 @@ export function recorder(state: RecorderState, event: RecorderEvent): RecorderSt
     case "failure":
       return fromRest(state, event);
     case "asking":
-      if (event.kind === "opened") return { step: "listening", seconds: 0, ...sungOf(event) };
-      if (event.kind === "unavailable") return failed({ kind: event.why });
-      if (event.kind === "interrupted") return failed({ kind: "interrupted", stoppedBy: event.cause });
-      return event.kind === "broken" ? failed({ kind: "broken" }) : state;
+    case "counting":
+      return beforeListening(state, event);
+    case "reading":
+      return whileReading(state, event);
     case "listening":
       return whileListening(state, event);
     case "stopping":
@@ -89,18 +117,76 @@ export function recorder(state: RecorderState, event: RecorderEvent): RecorderSt
       if (event.kind === "judged") return afterJudging(state, event);
       return event.kind === "broken" ? failed({ kind: "broken", seconds: state.seconds }) : state;
     case "result":
-      if (event.kind === "ask") return { step: "asking" };
-      if (event.kind !== "felt") return state;
-      return { ...state, take: { ...state.take, warmedUp: event.warmedUp, effort: event.effort } };
+      return afterResult(state, event);
   }
 }
 
 function fromRest(state: RecorderState, event: RecorderEvent): RecorderState {
   if (event.kind === "ask") return { step: "asking" };
-  if (event.kind === "restored") return { step: "result", take: event.take };
+  if (event.kind === "read") return { step: "reading", name: event.name };
+  if (event.kind === "restored") return resultOf(event.take);
   if (event.kind !== "rejudging") return state;
-  const { id, sungAt, seconds } = event;
-  return { step: "judging", stoppedBy: "reloaded", seconds, id, sungAt, processed: [] };
+  return { ...judgingOf(event), stoppedBy: "reloaded" };
+}
+
+function beforeListening(state: RecorderState, event: RecorderEvent): RecorderState {
+  switch (event.kind) {
+    case "beat":
+      return { step: "counting", left: event.left };
+    case "opened":
+      return { step: "listening", seconds: 0, ...sungOf(event) };
+    case "unavailable":
+      return failed({ kind: event.why });
+    case "interrupted":
+      return failed({ kind: "interrupted", stoppedBy: event.cause });
+    case "stop":
+      return idle;
+    default:
+      return event.kind === "broken" ? failed({ kind: "broken" }) : state;
+  }
+}
+
+function whileReading(state: RecorderState, event: RecorderEvent): RecorderState {
+  switch (event.kind) {
+    case "decoded":
+      return { ...judgingOf(event), stoppedBy: "file" };
+    case "unusable":
+      return failed({ kind: event.why, stoppedBy: "file", file: event.file });
+    case "broken":
+      return failed({ kind: "broken", stoppedBy: "file" });
+    default:
+      return state;
+  }
+}
+
+function afterResult(state: RecorderState & { step: "result" }, event: RecorderEvent): RecorderState {
+  const { part, ...take } = state.take;
+  switch (event.kind) {
+    case "ask":
+      return { step: "asking" };
+    case "read":
+      return { step: "reading", name: event.name };
+    case "felt":
+      return { ...state, take: { ...state.take, warmedUp: event.warmedUp, effort: event.effort } };
+    case "judgePart":
+      return { ...state, judgingPart: true, refusedPart: null };
+    case "judgeWhole":
+      return part ? resultOf({ ...take, report: part.whole }) : state;
+    case "broken":
+      return { ...state, judgingPart: false, refusedPart: "That part could not be read. The take is as it was." };
+    case "judged": {
+      if (!state.judgingPart || !event.part) return state;
+      const { report } = event;
+      if (report.verdict !== "heard") return { ...state, judgingPart: false, refusedPart: report.sentence };
+      return resultOf({ ...take, report, part: { ...event.part, whole: part?.whole ?? take.report } });
+    }
+    default:
+      return state;
+  }
+}
+
+function resultOf(take: HeardTake): RecorderState {
+  return { step: "result", take, judgingPart: false, refusedPart: null };
 }
 
 function whileListening(state: RecorderState & { step: "listening" }, event: RecorderEvent): RecorderState {
@@ -127,12 +213,16 @@ function afterJudging(
   const { stoppedBy, seconds } = state;
   if (report.verdict === "heard") {
     const take = { ...sungOf(state), report, pcm, sampleRate, stoppedBy, warmedUp: null, effort: null };
-    return { step: "result", take };
+    return resultOf(take);
   }
-  const brokenOff = stoppedBy !== "singer" && stoppedBy !== "full";
+  const brokenOff = stoppedBy !== "singer" && stoppedBy !== "full" && stoppedBy !== "file";
   const { sentence, nextStep } = report;
   const kind = brokenOff ? "interrupted" : report.verdict;
   return failed({ kind, report: { sentence, nextStep }, seconds, stoppedBy });
+}
+
+function judgingOf({ id, sungAt, seconds }: { id: string; sungAt: string; seconds: number }) {
+  return { step: "judging", seconds, id, sungAt, processed: [] as Processing[] } as const;
 }
 
 function failed(failure: Partial<Failure> & { kind: FailureKind }): RecorderState {

@@ -15,6 +15,7 @@ function setUp(faults: { push?: boolean; judge?: boolean } = {}) {
         if (faults.push) throw new RangeError("bad block");
         return [{ t: 0, hz: 220, clarity: 1, levelDb: pcm.length }];
       },
+      ahead: () => [{ t: 0.01, hz: 222, clarity: 1, levelDb: -20 }],
     }),
     judge(pcm) {
       if (faults.judge) throw new RangeError("bad take");
@@ -22,6 +23,7 @@ function setUp(faults: { push?: boolean; judge?: boolean } = {}) {
       return report;
     },
     keepPart: (id, index, pcm) => parts.push({ id, index, length: pcm.length }),
+    warmUp: () => undefined,
     post: (message) => posted.push(message),
   });
   const begin = (): ((sound: TakeSound) => void) => {
@@ -48,10 +50,21 @@ it("answers every block with its frames, the time so far and the loudness", () =
   play(block(100));
   play(block(100, 1));
   expect(posted).toHaveLength(2);
-  expect(posted[0]).toMatchObject({ kind: "heard", seconds: 0.1, peak: 0.5 });
+  expect(posted[0]).toMatchObject({ kind: "heard", seconds: 0.1, peak: 0.5, ahead: [{ hz: 222 }] });
   expect(posted[1]).toMatchObject({ kind: "heard", seconds: 0.2, peak: 1 });
   // AES17: a full-scale square wave is 3.01 dB above a full-scale sine.
   expect((posted[1] as { levelDb: number }).levelDb).toBeCloseTo(3.01, 2);
+});
+
+it("gathers short blocks until there may be a new frame, and loses neither frame nor peak", () => {
+  const { begin, posted } = setUp();
+  const play = begin();
+  play(block(5, 0.9));
+  expect(posted).toHaveLength(0);
+  play(block(5, 0.1));
+  expect(posted).toHaveLength(1);
+  expect(posted[0]).toMatchObject({ kind: "heard", seconds: 0.01, frames: [{ hz: 220 }, { hz: 220 }] });
+  expect((posted[0] as { peak: number }).peak).toBeCloseTo(0.9, 6);
 });
 
 it("waits for the blocks that are still on their way before it judges", () => {
@@ -98,7 +111,7 @@ it("judges sound that was kept before a reload, and forgets a dropped take", () 
   play(block(100));
   tell({ kind: "judge", endIsComing: false });
   expect(judgedLengths).toEqual([]);
-  tell({ kind: "judgeKept", sampleRate: rate, pcm: new Float32Array(3000) });
+  tell({ kind: "judgeKept", sampleRate: rate, pcm: new Float32Array(3000), part: null });
   expect(judgedLengths).toEqual([3000]);
 });
 

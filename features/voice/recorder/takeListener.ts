@@ -1,14 +1,18 @@
 import type { LiveFrame } from "@/shared/voice/liveTracker";
 import type { TakeReport } from "@/shared/voice/takeReport";
 import { longestTakeS } from "./takeProtocol";
-import type { FromTakeWorker, TakeSound, ToTakeWorker } from "./takeProtocol";
+import type { FromTakeWorker, TakePart, TakeSound, ToTakeWorker } from "./takeProtocol";
+
+const tellEveryS = 0.009;
 
 /** What the listener needs of the engine and of the device; the worker passes the real ones. */
 export interface TakeTools {
-  createTracker(sampleRate: number): { push(pcm: Float32Array): LiveFrame[] };
+  createTracker(sampleRate: number): { push(pcm: Float32Array): LiveFrame[]; ahead(): LiveFrame[] };
   judge(pcm: Float32Array, sampleRate: number): TakeReport;
   /** stores one second of sound on the device, against a reload */
   keepPart(id: string, index: number, pcm: Float32Array<ArrayBuffer>): void;
+  /** runs the engine once on nothing that matters, so that its first real work is not its slowest */
+  warmUp(): void;
   post(message: FromTakeWorker, transfer?: Transferable[]): void;
 }
 
@@ -20,6 +24,10 @@ interface OpenTake {
   length: number;
   kept: number;
   parts: number;
+  /** decided frames and loudness that the page has not been told yet */
+  pending: LiveFrame[];
+  level: { peak: number; levelDb: number };
+  told: number;
   sound: MessagePort;
   ended: boolean;
   judgeAtEnd: boolean;
@@ -29,10 +37,10 @@ interface OpenTake {
 export function createTakeListener(tools: TakeTools): (message: ToTakeWorker) => void {
   let take: OpenTake | null = null;
 
-  const judge = (pcm: Float32Array<ArrayBuffer>, sampleRate: number) => {
+  const judge = (pcm: Float32Array<ArrayBuffer>, sampleRate: number, part: TakePart | null = null) => {
     try {
       const report = tools.judge(pcm, sampleRate);
-      tools.post({ kind: "judged", report, pcm, sampleRate }, [pcm.buffer]);
+      tools.post({ kind: "judged", report, pcm, sampleRate, part }, [pcm.buffer]);
     } catch (fault) {
       tools.post({ kind: "broken", reason: String(fault) });
     }
@@ -72,7 +80,10 @@ export function createTakeListener(tools: TakeTools): (message: ToTakeWorker) =>
         return;
       case "judgeKept":
         drop();
-        judge(message.pcm, message.sampleRate);
+        judge(message.pcm, message.sampleRate, message.part);
+        return;
+      case "warmUp":
+        if (!take) tools.warmUp();
         return;
       case "drop":
         drop();
@@ -90,6 +101,9 @@ function openTake({ sampleRate, sound, keepAs }: ToTakeWorker & { kind: "begin" 
     length: 0,
     kept: 0,
     parts: 0,
+    pending: [],
+    level: { peak: 0, levelDb: -120 },
+    told: 0,
     ended: false,
     judgeAtEnd: false,
   };
@@ -100,19 +114,29 @@ function listen(take: OpenTake, block: Float32Array<ArrayBuffer>, tools: TakeToo
   if (pcm.length === 0) return;
   take.pcm.set(pcm, take.length);
   take.length += pcm.length;
-  let frames: LiveFrame[];
   try {
-    frames = take.tracker.push(pcm);
+    take.pending.push(...take.tracker.push(pcm));
   } catch (fault) {
     tools.post({ kind: "broken", reason: String(fault) });
     return;
   }
-  tools.post({ kind: "heard", frames, seconds: take.length / take.sampleRate, ...loudness(pcm) });
+  take.level = louder(take.level, loudness(pcm));
+  // A frame comes every 10 ms; telling more often than that says nothing new.
+  if (take.length - take.told >= tellEveryS * take.sampleRate) {
+    const { pending: frames, level } = take;
+    const ahead = take.tracker.ahead();
+    tools.post({ kind: "heard", frames, ahead, seconds: take.length / take.sampleRate, ...level });
+    Object.assign(take, { pending: [], level: { peak: 0, levelDb: -120 }, told: take.length });
+  }
   if (take.length - take.kept >= take.sampleRate) {
     tools.keepPart(take.id, take.parts, take.pcm.slice(take.kept, take.length));
     take.parts += 1;
     take.kept = take.length;
   }
+}
+
+function louder(a: OpenTake["level"], b: OpenTake["level"]): OpenTake["level"] {
+  return { peak: Math.max(a.peak, b.peak), levelDb: Math.max(a.levelDb, b.levelDb) };
 }
 
 function loudness(pcm: Float32Array): { levelDb: number; peak: number } {

@@ -6,14 +6,22 @@ export const longestTakeS = 20;
 /** From here on a take usually carries a range. */
 export const enoughTakeS = 5;
 
+/** The part of a take between two moments, in seconds from its start. */
+export interface TakePart {
+  startS: number;
+  endS: number;
+}
+
 /** What the page tells the worker. */
 export type ToTakeWorker =
   /** Begin a take; sound comes through the port as `TakeSound`. `keepAs` names the take in the device's own storage. */
   | { kind: "begin"; sampleRate: number; sound: MessagePort; keepAs: string }
   /** Judge the take: behind its end mark where one is on its way, at once where the sound broke off without one. */
   | { kind: "judge"; endIsComing: boolean }
-  /** Judge sound that was kept before a reload. */
-  | { kind: "judgeKept"; sampleRate: number; pcm: Float32Array<ArrayBuffer> }
+  /** Judge sound that is there already: kept before a reload, read from a file, or a part of a take. */
+  | { kind: "judgeKept"; sampleRate: number; pcm: Float32Array<ArrayBuffer>; part: TakePart | null }
+  /** Get ready for a take. */
+  | { kind: "warmUp" }
   /** Forget this take. */
   | { kind: "drop" };
 
@@ -22,8 +30,8 @@ export type TakeSound = { kind: "block"; pcm: Float32Array<ArrayBuffer> } | { ki
 
 /** What the worker answers. */
 export type FromTakeWorker =
-  /** About every 20 ms while listening. `peak` is the largest absolute sample of the block, `levelDb` its RMS in dBFS. */
-  | { kind: "heard"; frames: LiveFrame[]; seconds: number; levelDb: number; peak: number }
-  | { kind: "judged"; report: TakeReport; pcm: Float32Array<ArrayBuffer>; sampleRate: number }
+  /** About every 10 ms while listening. `ahead` is what was measured and not yet decided, `peak` is the largest absolute sample since the last message, `levelDb` its RMS in dBFS. */
+  | { kind: "heard"; frames: LiveFrame[]; ahead: LiveFrame[]; seconds: number; levelDb: number; peak: number }
+  | { kind: "judged"; report: TakeReport; pcm: Float32Array<ArrayBuffer>; sampleRate: number; part: TakePart | null }
   /** The engine stopped with a fault. */
   | { kind: "broken"; reason: string };

@@ -15,6 +15,23 @@ const tell = createTakeListener({
   judge: (pcm, sampleRate) => listenToTake(pcm, sampleRate),
   // Full or forbidden storage only costs the safety against a reload, never the take.
   keepPart: (id, index, pcm) => void appendUnkept(id, index, pcm).catch(() => undefined),
+  warmUp: () => warmUp(),
   post: (message, transfer = []) => scope.postMessage(message, transfer),
 });
+
+/** Two seconds of a rising tone, tracked and judged: the browser compiles what it has seen at work. */
+function warmUp(): void {
+  const rate = 48_000;
+  const tone = Float32Array.from(
+    { length: 2 * rate },
+    (_, k) => 0.3 * Math.sin((2 * Math.PI * 180 * k * (1 + k / rate)) / rate),
+  );
+  const tracker = createLiveTracker(rate);
+  for (let from = 0; from < tone.length; from += rate / 4) {
+    tracker.push(tone.subarray(from, from + rate / 4));
+    tracker.ahead();
+  }
+  listenToTake(tone, rate);
+}
+
 scope.onmessage = ({ data }) => tell(data);

@@ -2,6 +2,7 @@ import { useCallback, useEffect, useReducer, useRef, useState } from "react";
 import { createCapture, type Capture } from "./capture";
 import { createLiveSound, type LiveSound } from "./liveSound";
 import { idle, recorder, type RecorderState } from "./recorder";
+import type { TakePart } from "./takeProtocol";
 import { dropStale, dropUnkept, markTakeOfThisTab, readUnkept, saveUnkept, takeOfThisTab } from "./unkeptTake";
 
 /** Less than this is not worth judging after a reload. */
@@ -12,8 +13,14 @@ export interface Recorder {
   /** true until it is known whether this tab still has a take that nobody kept */
   restoring: boolean;
   live: LiveSound;
-  sing(): void;
+  /** Asks for the microphone and listens, after a count of four where one is wanted. */
+  sing(counted?: boolean): void;
+  /** Ends the take; while it is counted in, gives it up. */
   stop(): void;
+  /** Reads a recording instead. */
+  read(file: File): void;
+  /** Judges a part of the take instead of the whole; null judges the whole again. */
+  trim(part: TakePart | null): void;
   /** Forgets the take, its sound and its numbers. */
   leave(): void;
   felt(warmedUp: boolean | null, effort: number | null): void;
@@ -27,6 +34,7 @@ export function useRecorder(): Recorder {
   const capture = useRef<Capture | null>(null);
   const { step } = state;
   const stepNow = useRef(step);
+  const counted = useRef(false);
   useEffect(() => {
     stepNow.current = step;
   }, [step]);
@@ -34,6 +42,7 @@ export function useRecorder(): Recorder {
   useEffect(() => {
     const own = createCapture(dispatch, live);
     capture.current = own;
+    own.warmUp();
     let here = true;
     void restore(own, dispatch, () => here).finally(() => here && setRestoring(false));
     return () => {
@@ -46,7 +55,7 @@ export function useRecorder(): Recorder {
   }, [live]);
 
   useEffect(() => {
-    if (step === "asking") void capture.current?.start();
+    if (step === "asking") void capture.current?.start(counted.current);
     if (step === "stopping") void capture.current?.stop();
     if (step === "failure") {
       capture.current?.drop();
@@ -59,13 +68,34 @@ export function useRecorder(): Recorder {
     if (take) void saveUnkept(take).catch(() => undefined);
   }, [take]);
 
-  const sing = useCallback(() => {
+  const sing = useCallback((count = false) => {
     forget();
+    counted.current = count;
     dispatch({ kind: "ask" });
   }, []);
-  const stop = useCallback(() => dispatch({ kind: "stop" }), []);
+  const read = useCallback((file: File) => {
+    forget();
+    dispatch({ kind: "read", name: file.name });
+    void capture.current?.read(file);
+  }, []);
+  const trim = useCallback(
+    (part: TakePart | null) => {
+      if (!take) return;
+      if (!part) dispatch({ kind: "judgeWhole" });
+      else {
+        dispatch({ kind: "judgePart" });
+        capture.current?.judgePart(take, part);
+      }
+    },
+    [take],
+  );
+  const stop = useCallback(() => {
+    if (stepNow.current === "counting") capture.current?.drop();
+    dispatch({ kind: "stop" });
+  }, []);
   const leave = useCallback(() => {
-    capture.current?.drop();
+    // A long recording may still be being read: only its end sets the worker free at once.
+    capture.current?.close();
     forget();
     dispatch({ kind: "leave" });
   }, []);
@@ -73,7 +103,7 @@ export function useRecorder(): Recorder {
     (warmedUp: boolean | null, effort: number | null) => dispatch({ kind: "felt", warmedUp, effort }),
     [],
   );
-  return { state, restoring, live, sing, stop, leave, felt };
+  return { state, restoring, live, sing, stop, read, trim, leave, felt };
 }
 
 /** Only what this tab recorded is erased: the mark names it. */

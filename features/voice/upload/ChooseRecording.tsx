@@ -1,0 +1,98 @@
+import { useRef, useState } from "react";
+import { View } from "react-native";
+import { Button } from "@/features/ui/Button";
+import { Icon } from "@/features/ui/Icon";
+import { LinkButton } from "@/features/ui/LinkButton";
+import { Screen } from "@/features/ui/Screen";
+import { Text } from "@/features/ui/Text";
+import { colors, sizes } from "@/features/ui/theme";
+import { webProps } from "@/features/ui/webStyle";
+
+export interface ChooseRecordingProps {
+  /** it is not known yet whether there is a take already */
+  waiting: boolean;
+  onChoose: (file: File) => void;
+}
+
+const accepted = ".wav,.mp3,.m4a,.ogg,.oga,.opus,.webm,.flac,audio/*";
+
+/** Which recordings can be read, and the button that chooses one; on a wide page it may be dropped. */
+export function ChooseRecording({ waiting, onChoose }: ChooseRecordingProps) {
+  const input = useRef<HTMLInputElement>(null);
+  const [over, setOver] = useState(false);
+  const drop = {
+    onDragOver: (event: React.DragEvent) => {
+      event.preventDefault();
+      setOver(true);
+    },
+    onDragLeave: () => setOver(false),
+    onDrop: (event: React.DragEvent) => {
+      event.preventDefault();
+      setOver(false);
+      const file = event.dataTransfer.files[0];
+      if (file) onChoose(file);
+    },
+  };
+  return (
+    <Screen
+      title="Use a recording"
+      crumb={{ label: "Voice", href: "/voice" }}
+      footer={
+        <>
+          <Button
+            icon="file"
+            label="Choose a recording"
+            busy={waiting}
+            onPress={() => input.current?.click()}
+            testID="upload-choose"
+          />
+          <LinkButton kind="text" icon="mic" label="Sing instead" href="/voice/sing" />
+        </>
+      }
+    >
+      <View style={{ gap: 20, paddingTop: 12, maxWidth: 560 }}>
+        <Text variant="body" style={{ fontSize: 20, lineHeight: 28 }}>
+          Choose a recording of one voice singing alone, and see which notes are yours.
+        </Text>
+        <View
+          {...webProps(drop)}
+          style={{
+            gap: 8,
+            padding: 20,
+            borderRadius: sizes.radius,
+            borderWidth: 1.5,
+            borderStyle: "dashed",
+            borderColor: over ? colors.plum : colors.inkSoft,
+            backgroundColor: over ? "var(--soft)" : "transparent",
+          }}
+        >
+          <View style={{ flexDirection: "row", gap: 10, alignItems: "center" }}>
+            <Icon name="file" size={22} color={colors.plum} />
+            <Text variant="strong">wav, mp3, m4a, ogg, webm or flac</Text>
+          </View>
+          <Text variant="small" tone="soft">
+            Up to 20 MB and 10 minutes. 20 seconds are enough. You can also drop the file here.
+          </Text>
+        </View>
+        <Text tone="soft">
+          The recording is read on this device and not sent anywhere. Only numbers are kept, and only if you say so.
+        </Text>
+        <input
+          ref={input}
+          type="file"
+          accept={accepted}
+          aria-label="Recording"
+          data-testid="upload-file"
+          tabIndex={-1}
+          style={{ position: "absolute", width: 1, height: 1, opacity: 0, pointerEvents: "none" }}
+          onChange={(event) => {
+            const file = event.target.files?.[0];
+            // The same file may be chosen again.
+            event.target.value = "";
+            if (file) onChoose(file);
+          }}
+        />
+      </View>
+    </Screen>
+  );
+}

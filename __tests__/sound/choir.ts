@@ -13,20 +13,20 @@ export const PROGRAM = { choirAahs: 52, voiceOohs: 53, nylonGuitar: 24 } as cons
  * own synthesiser.
  *
  * @param notes whole MIDI numbers with durations in seconds, one after the other
- * @param options program (General MIDI, from 0), sampleRate, padS of silence before
+ * @param options program (General MIDI, from 0), sampleRate, padS of silence before, gapS of rest after each note
  * @returns mono samples; null where fluidsynth or the sound font is not installed
  */
 export function renderChoir(
   notes: readonly { midi: number; durationS: number }[],
-  options: { program?: number; sampleRate?: number; padS?: number } = {},
+  options: { program?: number; sampleRate?: number; padS?: number; gapS?: number } = {},
 ): { pcm: Float32Array; sampleRate: number } | null {
-  const { program = PROGRAM.choirAahs, sampleRate = 44100, padS = 0.3 } = options;
+  const { program = PROGRAM.choirAahs, sampleRate = 44100, padS = 0.3, gapS = 0 } = options;
   if (!existsSync(SOUND_FONT) || spawnSync("fluidsynth", ["--version"]).status !== 0) return null;
   const folder = mkdtempSync(join(tmpdir(), "choir-"));
   try {
     const midiPath = join(folder, "tune.mid");
     const wavPath = join(folder, "tune.wav");
-    writeFileSync(midiPath, midiBytes(notes, program, padS));
+    writeFileSync(midiPath, midiBytes(notes, program, padS, gapS));
     execFileSync("fluidsynth", ["-ni", "-q", "-R", "0", "-C", "0", "-g", "0.8", "-r", String(sampleRate), "-T", "wav", "-O", "s16", "-F", wavPath, SOUND_FONT, midiPath], { stdio: "ignore" });
     return readWav(wavPath);
   } finally {
@@ -35,12 +35,12 @@ export function renderChoir(
 }
 
 /** A one-track MIDI file at one tick a millisecond. */
-function midiBytes(notes: readonly { midi: number; durationS: number }[], program: number, padS: number): Uint8Array {
+function midiBytes(notes: readonly { midi: number; durationS: number }[], program: number, padS: number, gapS: number): Uint8Array {
   const track: number[] = [0, 0xff, 0x51, 3, 0x07, 0xa1, 0x20, 0, 0xc0, program];
   let wait = Math.round(padS * 1000);
   for (const { midi, durationS } of notes) {
     track.push(...variableLength(wait), 0x90, midi, 96, ...variableLength(Math.round(durationS * 1000)), 0x80, midi, 0);
-    wait = 0;
+    wait = Math.round(gapS * 1000);
   }
   track.push(...variableLength(500), 0xff, 0x2f, 0);
   const length = track.length;

@@ -1,6 +1,6 @@
-import { PROGRAM, renderChoir } from "./choir";
+import { choirClips } from "./corpusChoir";
 import { CORPUS_RATE, clipRandom, type Clip, type ClipSound, type CorpusHalf } from "./corpusClip";
-import { lineTruth, pitchCurve, type ClipTruth, type Delivery, type LineNote } from "./corpusLine";
+import { lineTruth, pitchCurve, type Delivery, type LineNote } from "./corpusLine";
 import * as rooms from "./corpusRoom";
 import {
   makeBody,
@@ -15,7 +15,6 @@ import {
 import { soundLine, type VoiceBody } from "./corpusVoice";
 import type { Random } from "./random";
 
-const { max, min } = Math;
 const rate = CORPUS_RATE;
 
 /** One kind of recording: who sings it, how, and what the place and the microphone do. */
@@ -136,7 +135,7 @@ export function singingClips(half: CorpusHalf): Clip[] {
       };
     }),
   );
-  return [...synthetic, ...choirs(half), ...tooLittle(half)];
+  return [...synthetic, ...choirClips(half), ...tooLittle(half)];
 }
 
 function sing(voice: VoiceName, kind: PhraseKind, condition: Condition, random: Random): ClipSound {
@@ -148,70 +147,6 @@ function sing(voice: VoiceName, kind: PhraseKind, condition: Condition, random: 
   const dry = soundLine(notes, curve, body, durationS, rate, random);
   const pcm = condition.place ? condition.place(dry, random) : rooms.addNoise(dry, rate, 50, random);
   return { pcm, sampleRate: rate, truth: lineTruth(notes, curve, durationS, condition.tailS ?? 0) };
-}
-
-/** Sampled voices of Debian's General MIDI sound font: nothing in them is ours. */
-const CHOIRS: [string, number, number, "plain" | "noise" | "laptop" | "hum"][] = [
-  ["choir-low", PROGRAM.choirAahs, 43, "plain"],
-  ["choir-middle", PROGRAM.choirAahs, 52, "noise"],
-  ["choir-high", PROGRAM.choirAahs, 62, "plain"],
-  ["oohs-low", PROGRAM.voiceOohs, 48, "laptop"],
-  ["oohs-middle", PROGRAM.voiceOohs, 57, "plain"],
-  ["oohs-high", PROGRAM.voiceOohs, 66, "hum"],
-];
-const STEPS = [
-  [0, 2, 4, 5, 7, 9, 7, 4, 0, 12, 7, 0],
-  [4, 7, 12, 9, 7, 4, 5, 2, 0, 4, 7, 11],
-] as const;
-
-function choirs(half: CorpusHalf): Clip[] {
-  return CHOIRS.map(([name, program, base, place]) => ({
-    name,
-    half,
-    tags: [
-      "sampled",
-      place === "plain" ? "clean" : place === "noise" ? "noise20" : place === "hum" ? "hum" : "weakfund",
-    ],
-    make: () => sampled(program, base, place, half, clipRandom(half, name)),
-  }));
-}
-
-function sampled(program: number, base: number, place: string, half: CorpusHalf, random: Random): ClipSound | null {
-  const root = base + Math.floor(random.between(0, 5));
-  const melody = STEPS[half === "dev" ? 0 : 1].map((step) => ({
-    midi: root + step,
-    durationS: random.between(0.45, 0.7),
-  }));
-  const padS = 0.3;
-  const rendered = renderChoir(melody, { program, sampleRate: rate, padS });
-  if (rendered === null) return null;
-  let { pcm } = rendered;
-  if (place === "noise") pcm = rooms.addNoise(pcm, rate, 20, random);
-  if (place === "laptop") pcm = rooms.laptopMicrophone(pcm, rate, random);
-  if (place === "hum") pcm = rooms.addMains(pcm, rate, 60, -15, random);
-  return { pcm, sampleRate: rate, truth: sampledTruth(melody, padS, pcm.length / rate) };
-}
-
-/** Sampled voices swell in and ring on into the next note: the edges of each note are not scored. */
-function sampledTruth(melody: { midi: number; durationS: number }[], padS: number, durationS: number): ClipTruth {
-  const f0: (number | null)[] = Array.from({ length: Math.floor(durationS * 100) }, () => null);
-  const ignore: [number, number][] = [];
-  let at = padS;
-  for (const note of melody) {
-    for (let k = Math.ceil(at * 100); k < (at + note.durationS) * 100 && k < f0.length; k++)
-      f0[k] = 440 * 2 ** ((note.midi - 69) / 12);
-    ignore.push([at - 0.03, at + 0.15]);
-    at += note.durationS;
-  }
-  ignore.push([at - 0.03, durationS]);
-  const lowMidi = min(...melody.map((n) => n.midi));
-  const highMidi = max(...melody.map((n) => n.midi));
-  return {
-    hopS: 0.01,
-    f0,
-    ignore,
-    expected: { verdict: "ok", accept: ["ok"], lowMidi, highMidi, looseLowMidi: lowMidi, looseHighMidi: highMidi },
-  };
 }
 
 function tooLittle(half: CorpusHalf): Clip[] {

@@ -11,6 +11,7 @@ import { bandWords, certaintyWords, noteWord } from "./noteWords";
 import { profileOf, singingVoiceOf } from "./singingVoiceOf";
 import { timeOnNotes } from "./timeOnNotes";
 import { VoiceLadder } from "./VoiceLadder";
+import { WhyNotes } from "./WhyNotes";
 
 export interface VoicePictureProps {
   voice: Voice;
@@ -48,6 +49,7 @@ export function VoicePicture({ voice, takes, onUseTakes }: VoicePictureProps) {
                 <Text tone="soft">{`Your voice probably reaches about ${bandWords(profile.estimate)} (estimate).`}</Text>
               )}
               <Text tone="soft">{`${certaintyWords(profile.certainty)}. ${profile.reasons.join(" ")}`}</Text>
+              <WhyNotes profile={profile} takes={takes} />
             </>
           )
         )}
@@ -60,6 +62,14 @@ export function VoicePicture({ voice, takes, onUseTakes }: VoicePictureProps) {
             testID="voice-use-takes"
           />
         )}
+        <LinkButton
+          kind="secondary"
+          icon="mic"
+          label="Find your lowest and highest note"
+          href={`/voice/guided?voice=${voice.id}`}
+          style={{ alignSelf: "flex-start", marginTop: 8 }}
+          testID="voice-guided"
+        />
       </View>
     </View>
   );

@@ -9,10 +9,12 @@ import { Skeleton } from "@/features/ui/Skeleton";
 import { useLayout } from "@/features/ui/useLayout";
 import { chooseVoice, useChosenVoiceId } from "./chosenVoice";
 import { pickVoice } from "./useSingingVoice";
+import { MovingVoice } from "./MovingVoice";
 import { TakeList } from "./TakeList";
+import { TrendPicture } from "./trend/TrendPicture";
 import { VoiceNames } from "./VoiceNames";
 import { VoicePicture } from "./VoicePicture";
-import { useEraseTake, useRemoveVoice, useSaveVoice, voiceQueries } from "./voiceQueries";
+import { useEraseTake, useRemoveVoice, useSaveTake, useSaveVoice, voiceQueries } from "./voiceQueries";
 import type { Take } from "@/shared/contract/take";
 import type { Voice } from "@/shared/contract/voice";
 
@@ -66,6 +68,7 @@ function NoVoiceYet() {
         action={
           <View style={{ gap: 8 }}>
             <LinkButton icon="mic" label="Sing a few seconds" href="/voice/sing" testID="voice-sing" />
+            <LinkButton kind="text" label="Find your lowest and highest note" href="/voice/guided" testID="voice-guided" />
             <LinkButton kind="text" label="Set notes by hand" href="/voice/by-hand" testID="voice-by-hand" />
           </View>
         }
@@ -80,8 +83,9 @@ function ChosenVoice({ voice, voices, takes }: { voice: Voice; voices: Voice[]; 
   const save = useSaveVoice();
   const remove = useRemoveVoice();
   const erase = useEraseTake();
+  const change = useSaveTake();
   const own = takes.filter(({ voiceId }) => voiceId === voice.id);
-  const refusal = [save, remove, erase].find(({ isError }) => isError)?.error;
+  const refusal = [save, remove, erase, change].find(({ isError }) => isError)?.error;
   return (
     <View
       style={{
@@ -100,7 +104,16 @@ function ChosenVoice({ voice, voices, takes }: { voice: Voice; voices: Voice[]; 
             {`${refusal.message} Nothing was changed.`}
           </Notice>
         )}
-        {own.length > 0 && <TakeList takes={own} erasing={erase.isPending} onErase={(id) => erase.mutate(id)} />}
+        <MovingVoice takes={own} />
+        {own.length > 1 && <TrendPicture takes={own} />}
+        {own.length > 0 && (
+          <TakeList
+            takes={own}
+            busy={erase.isPending}
+            onErase={(id) => erase.mutate(id)}
+            onChange={(take) => change.mutate(take)}
+          />
+        )}
         <VoiceNames
           voices={voices}
           chosen={voice}

@@ -45,6 +45,25 @@ export function useKeepTake() {
   });
 }
 
+/** Keeps what was held under guidance, in a voice old or new. The voice becomes the chosen one. */
+export function useKeepHolds() {
+  const refresh = useFresh();
+  return useMutation({
+    mutationFn: async ({ take, voice }: { take: Take; voice: Voice }) => {
+      await shelf.put("voices", { ...voice, byHand: null });
+      await shelf.put("takes", take);
+      chooseVoice(voice.id);
+    },
+    onSuccess: refresh,
+  });
+}
+
+/** Changes what the singer said about a take: how it felt, whether warmed up. */
+export function useSaveTake() {
+  const refresh = useFresh();
+  return useMutation({ mutationFn: (take: Take) => shelf.put("takes", take), onSuccess: refresh });
+}
+
 /** Creates or changes a voice: its name, or its notes set by hand. */
 export function useSaveVoice() {
   const refresh = useFresh();

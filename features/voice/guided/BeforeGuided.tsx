@@ -1,0 +1,115 @@
+import { useState } from "react";
+import { View } from "react-native";
+import { Button } from "@/features/ui/Button";
+import { Heading } from "@/features/ui/Heading";
+import { LinkButton } from "@/features/ui/LinkButton";
+import { Notice } from "@/features/ui/Notice";
+import { Screen } from "@/features/ui/Screen";
+import { Segmented } from "@/features/ui/Segmented";
+import { Text } from "@/features/ui/Text";
+import { useLayout } from "@/features/ui/useLayout";
+
+export interface BeforeGuidedProps {
+  /** the note the way starts from, by name; null where the singer hums first */
+  from: string | null;
+  onStart: (under16: boolean) => void;
+}
+
+/** What will happen, when to stop, and the button that starts it. Nothing sounds before. */
+export function BeforeGuided({ from, onStart }: BeforeGuidedProps) {
+  const wide = useLayout() === "wide";
+  const [age, setAge] = useState<"adult" | "young">("adult");
+  const young = age === "young";
+  return (
+    <Screen
+      title="Lowest and highest note"
+      crumb={{ label: "Voice", href: "/voice" }}
+      wide
+      footer={
+        <View style={{ flexDirection: "row", flexWrap: "wrap", gap: 10 }}>
+          <LinkButton kind="secondary" label="Sing a phrase instead" href="/voice/sing" />
+          <Button
+            icon="mic"
+            label="Start gently"
+            onPress={() => onStart(young)}
+            style={{ flexGrow: 1 }}
+            testID="guided-start"
+          />
+        </View>
+      }
+    >
+      <View style={{ flexDirection: wide ? "row" : "column", gap: wide ? 48 : 20, paddingTop: 12 }}>
+        <View style={[{ gap: 18 }, wide ? { flexBasis: 0, flexGrow: 1, maxWidth: 560 } : { maxWidth: 560 }]}>
+          <Text variant="body" style={{ fontSize: 20, lineHeight: 28 }}>
+            {from === null
+              ? "Hum one comfortable note. Then you hear a tone, sing it, and go down step by step; after a rest, up."
+              : `You hear a tone, sing it, and go down step by step from ${from}; after a rest, up.`}
+          </Text>
+          <Text>
+            Hold each note for about two seconds. At each end you have two or three tries, and the best held note counts.
+            You can stop at any time, and what you held is kept.
+          </Text>
+          <Text tone="soft">
+            This shows what you can hold. Which of those notes you would use in a song, you say afterwards. The sound
+            stays on this device.
+          </Text>
+          <View style={{ gap: 6 }}>
+            <Text variant="label">How old is the singer?</Text>
+            <Segmented
+              label="How old is the singer?"
+              options={[
+                { value: "adult", label: "16 or older" },
+                { value: "young", label: "Under 16" },
+              ]}
+              value={age}
+              onChange={setAge}
+              testID="guided-age"
+            />
+            {young && (
+              <Text variant="small" tone="soft" testID="guided-young">
+                Then this is the range of this week only: it will move. The first note that does not come ends the way;
+                nothing is tried again, and nobody has to reach anything.
+              </Text>
+            )}
+          </View>
+        </View>
+        <View style={[{ gap: 14 }, wide ? { flexBasis: 0, flexGrow: 1, maxWidth: 560 } : { maxWidth: 560 }]}>
+          <Notice kind="caution" title="When to stop" testID="guided-cautions">
+            <Heading level={2} size={16}>
+              Stop at once if
+            </Heading>
+            <View role="list" style={{ gap: 2 }}>
+              {stopSigns.map((sign) => (
+                <View key={sign} role="listitem" style={{ flexDirection: "row", gap: 8 }}>
+                  <Text variant="small" aria-hidden>
+                    •
+                  </Text>
+                  <Text variant="small" style={{ flexShrink: 1 }}>
+                    {sign}
+                  </Text>
+                </View>
+              ))}
+            </View>
+            <Text variant="small">Do not repeat an extreme note. Warm up first, and never push.</Text>
+            <Text variant="small" tone="soft">
+              If you are hoarse for more than about four weeks, see a doctor: so says the 2018 guideline on hoarseness of
+              the American Academy of Otolaryngology (AAO-HNS). Larkspan helps to practise; it does not replace a teacher
+              or a doctor.
+            </Text>
+          </Notice>
+          <Notice kind="caution" title="Headphones at a moderate level">
+            Headphones keep the tone out of the microphone. If you would have to raise your voice over them, they are too
+            loud.
+          </Notice>
+        </View>
+      </View>
+    </Screen>
+  );
+}
+
+const stopSigns = [
+  "it hurts or burns",
+  "your throat tickles and you have to cough",
+  "your top notes are gone",
+  "your voice turns hoarse",
+];

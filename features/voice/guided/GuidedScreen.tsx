@@ -1,0 +1,153 @@
+import { useQuery } from "@tanstack/react-query";
+import { useEffect, useRef, useState } from "react";
+import { View } from "react-native";
+import { newId } from "@/features/api/newId";
+import { Button } from "@/features/ui/Button";
+import { Card } from "@/features/ui/Card";
+import { LinkButton } from "@/features/ui/LinkButton";
+import { LiveText } from "@/features/ui/LiveText";
+import { Notice } from "@/features/ui/Notice";
+import { Screen } from "@/features/ui/Screen";
+import { Text } from "@/features/ui/Text";
+import type { Voice } from "@/shared/contract/voice";
+import { KeepTake } from "../KeepTake";
+import { noteWord, whenWords } from "../noteWords";
+import { useSingingVoice } from "../useSingingVoice";
+import { newVoice, useKeepHolds, voiceQueries } from "../voiceQueries";
+import { BeforeGuided } from "./BeforeGuided";
+import { GuidedResult } from "./GuidedResult";
+import { GuidedStep } from "./GuidedStep";
+import type { GuidedFindings, GuidedState } from "./guidedSteps";
+import { GuidedTurn } from "./GuidedTurn";
+import { announcement, failedWords } from "./guidedWords";
+import { takeOfHolds } from "./takeOfHolds";
+import { useGuided } from "./useGuided";
+
+export interface GuidedScreenProps {
+  /** the voice whose ends are looked for; the chosen one unless said */
+  voiceId: string | undefined;
+  onKept: () => void;
+}
+
+/** Lowest and highest note under guidance: cautions first, one note at a time, and what was found. */
+export function GuidedScreen({ voiceId, onKept }: GuidedScreenProps) {
+  const { state, live, tell } = useGuided();
+  const { singing, voice } = useSingingVoice(voiceId);
+  const home = singing ? Math.round((singing.comfort.lowMidi + singing.comfort.highMidi) / 2) : null;
+  useFocusOnChange(state.step);
+  const start = (under16: boolean) =>
+    tell({ kind: "start", id: newId(), startedAt: new Date().toISOString(), home, under16 });
+  return (
+    <>
+      {state.step === "before" && <BeforeGuided from={home === null ? null : noteWord(home)} onStart={start} />}
+      {state.step === "failed" && <Failed why={state.why} onAgain={() => tell({ kind: "leave" })} />}
+      {state.step === "turn" && <GuidedTurn run={state.run} onTell={tell} />}
+      {state.step === "done" && (
+        <Result
+          state={state}
+          chosenId={voice?.id ?? null}
+          onFound={(change) => tell({ kind: "found", change })}
+          onAgain={() => tell({ kind: "leave" })}
+          onKept={onKept}
+        />
+      )}
+      {state.step !== "before" && state.step !== "failed" && state.step !== "turn" && state.step !== "done" && (
+        <GuidedStep state={state} live={live} onTell={tell} />
+      )}
+      <LiveText hidden>{announcement(state)}</LiveText>
+    </>
+  );
+}
+
+interface ResultProps {
+  state: GuidedState & { step: "done" };
+  chosenId: string | null;
+  onFound: (change: Partial<GuidedFindings>) => void;
+  onAgain: () => void;
+  onKept: () => void;
+}
+
+function Result({ state, chosenId, onFound, onAgain, onKept }: ResultProps) {
+  const voices = useQuery(voiceQueries.list());
+  const keep = useKeepHolds();
+  const [first] = useState(() => newVoice("My voice"));
+  const [choosing, setChoosing] = useState(false);
+  const keepIn = (voice: Voice) =>
+    keep.mutate({ take: takeOfHolds(state.run, state.findings, voice.id), voice }, { onSuccess: onKept });
+  const many = (voices.data ?? []).length > 0;
+  return (
+    <Screen
+      title="What you can hold"
+      subtitle={`${whenWords(state.run.startedAt)}, held note by note`}
+      crumb={{ label: "Voice", href: "/voice" }}
+      wide
+      footer={
+        choosing ? null : (
+          <View style={{ flexDirection: "row", flexWrap: "wrap", gap: 10 }}>
+            <Button kind="secondary" label="Not this time" onPress={onAgain} testID="guided-drop" />
+            <Button
+              label="Keep these notes"
+              busy={keep.isPending || voices.isPending}
+              onPress={() => (many ? setChoosing(true) : keepIn(first))}
+              style={{ flexGrow: 1 }}
+              testID="guided-keep"
+            />
+          </View>
+        )
+      }
+    >
+      <View style={{ gap: 16, paddingTop: 8 }}>
+        {keep.error && (
+          <Notice kind="error" title="Not kept yet">
+            {`${keep.error.message} These notes are still here.`}
+          </Notice>
+        )}
+        {choosing && (
+          <KeepTake
+            voices={voices.data ?? []}
+            chosenId={chosenId}
+            busy={keep.isPending}
+            onKeep={keepIn}
+            onCancel={() => setChoosing(false)}
+          />
+        )}
+        <GuidedResult state={state} onFound={onFound} />
+      </View>
+    </Screen>
+  );
+}
+
+function Failed({ why, onAgain }: { why: (GuidedState & { step: "failed" })["why"]; onAgain: () => void }) {
+  const words = failedWords(why);
+  return (
+    <Screen
+      title={words.title}
+      crumb={{ label: "Voice", href: "/voice" }}
+      footer={
+        <>
+          <Button icon="again" label="Start again" onPress={onAgain} testID="guided-restart" />
+          <LinkButton kind="secondary" label="Set notes by hand" href="/voice/by-hand" />
+        </>
+      }
+    >
+      <View role="alert" testID={`guided-failed-${why}`} style={{ paddingTop: 12, maxWidth: 560 }}>
+        <Card style={{ gap: 12 }}>
+          <Text variant="strong">{words.happened}</Text>
+          <Text>{words.next}</Text>
+        </Card>
+      </View>
+    </Screen>
+  );
+}
+
+/** The button that was pressed is gone with its page: the focus goes on to the new heading. */
+function useFocusOnChange(step: GuidedState["step"]): void {
+  const page = step === "before" || step === "failed" || step === "turn" || step === "done" ? step : "way";
+  const before = useRef<string>(page);
+  useEffect(() => {
+    if (before.current === page) return;
+    before.current = page;
+    document.querySelector<HTMLElement>("h1")?.focus({ preventScroll: true });
+    window.scrollTo(0, 0);
+  }, [page]);
+}

@@ -1,4 +1,4 @@
-import { createLagMeter, HOP, SHORT_WINDOW, WINDOW } from "../signal/lagFrame";
+import { createLagMeter, HOP, SHORT_WINDOW, WINDOW, type LagFrame } from "../signal/lagFrame";
 import { createResampler } from "../signal/resampler";
 import { powerAt } from "./harmonicPresence";
 import { findCandidates, HIGHEST_HZ, type CandidateFrame, type PitchCandidate } from "./pitchCandidates";
@@ -27,19 +27,28 @@ export interface PitchTrack {
   room: RoomFloor;
 }
 
+/** What was measured of a take while it was sung; it depends on the sound alone. */
+export interface MeasuredSound {
+  /** the whole take at 8 kHz, shape [n] */
+  sound: Float32Array;
+  /** window k of the take, as many as were complete */
+  lagFrames: readonly LagFrame[];
+}
+
 /**
  * Tracks the pitch of a whole take: frame k stands at time k / 100 s.
  *
  * @param pcm mono samples in [-1, 1], shape [n]; not modified
  * @param sampleRate in Hz, 8000 to 192000
+ * @param measured of this very take, where it was listened to while it was sung; changes the speed and nothing else
  * @throws RangeError if the rate is outside 8-192 kHz
  */
-export function trackPitch(pcm: Float32Array, sampleRate: number): PitchTrack {
-  const sound = atAnalysisRate(pcm, sampleRate);
+export function trackPitch(pcm: Float32Array, sampleRate: number, measured: MeasuredSound | null = null): PitchTrack {
+  const sound = measured?.sound ?? atAnalysisRate(pcm, sampleRate);
   const measure = createLagMeter();
   const measureShort = createLagMeter(SHORT_WINDOW);
   const count = Math.floor((pcm.length * 100) / sampleRate);
-  const lagFrames = Array.from({ length: count }, (_, k) => measure(sound, k * HOP - WINDOW / 2));
+  const lagFrames = Array.from({ length: count }, (_, k) => measured?.lagFrames[k] ?? measure(sound, k * HOP - WINDOW / 2));
   const room = measureRoom(lagFrames);
   const finder = createPathFinder();
   const found: CandidateFrame[] = [];

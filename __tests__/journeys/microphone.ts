@@ -40,6 +40,12 @@ export function makeMicrophones() {
         highestMidi: truth.highestMidi,
       };
     },
+    /** The same voice singing the tune over and over, longer than a take may be. */
+    longVoice(lowestMidi: number) {
+      const notes = [...tune, ...tune, ...tune].map(({ step, durationS }) => ({ midi: lowestMidi + step, durationS }));
+      const { pcm, truth, sampleRate } = singPhrase({ notes, seed: 7, sampleRate: 48_000, padS, tract: 1.05 });
+      return { wav: keep(`long-${lowestMidi}`, pcm, sampleRate), ...truth };
+    },
     /** Debian's sampled choir singing the same; null where FluidSynth or its sound font is not installed. */
     choir(lowestMidi: number) {
       const rendered = renderChoir(

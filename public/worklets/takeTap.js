@@ -1,11 +1,11 @@
 /**
- * Hands the microphone's mono sound on in blocks of 256 samples (5 ms at 48 kHz). The first message it gets carries the
+ * Hands the microphone's mono sound on in blocks of 128 samples (3 ms at 48 kHz). The first message it gets carries the
  * port to write to, so that the blocks go straight to the worker and never wait for the page.
  */
 class TakeTap extends AudioWorkletProcessor {
   constructor() {
     super();
-    this.block = new Float32Array(256);
+    this.block = new Float32Array(128);
     this.filled = 0;
     this.out = null;
     this.open = true;
@@ -35,7 +35,7 @@ class TakeTap extends AudioWorkletProcessor {
       this.filled += 1;
       if (this.filled === this.block.length) {
         this.out.postMessage({ kind: "block", pcm: this.block }, [this.block.buffer]);
-        this.block = new Float32Array(256);
+        this.block = new Float32Array(128);
         this.filled = 0;
       }
     }

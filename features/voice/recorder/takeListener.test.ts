@@ -5,7 +5,8 @@ import type { FromTakeWorker, TakeSound, ToTakeWorker } from "./takeProtocol";
 const rate = 1000;
 const report = { verdict: "heard" } as TakeReport;
 
-function setUp(faults: { push?: boolean; judge?: boolean } = {}) {
+function setUp({ frameEvery = 1, ...faults }: { push?: boolean; judge?: boolean; frameEvery?: number } = {}) {
+  let pushed = 0;
   const posted: FromTakeWorker[] = [];
   const parts: { id: string; index: number; length: number }[] = [];
   const judgedLengths: number[] = [];
@@ -13,8 +14,10 @@ function setUp(faults: { push?: boolean; judge?: boolean } = {}) {
     createTracker: () => ({
       push(pcm) {
         if (faults.push) throw new RangeError("bad block");
-        return [{ t: 0, hz: 220, clarity: 1, levelDb: pcm.length }];
+        pushed += 1;
+        return pushed % frameEvery > 0 ? [] : [{ t: 0, hz: 220, clarity: 1, levelDb: pcm.length }];
       },
+      measured: () => null,
       ahead: () => [{ t: 0.01, hz: 222, clarity: 1, levelDb: -20 }],
     }),
     judge(pcm) {
@@ -56,15 +59,18 @@ it("answers every block with its frames, the time so far and the loudness", () =
   expect((posted[1] as { levelDb: number }).levelDb).toBeCloseTo(3.01, 2);
 });
 
-it("gathers short blocks until there may be a new frame, and loses neither frame nor peak", () => {
-  const { begin, posted } = setUp();
+it("tells a new frame at once, and gathers blocks that bring none", () => {
+  const { begin, posted } = setUp({ frameEvery: 3 });
   const play = begin();
   play(block(5, 0.9));
+  play(block(5, 0.1));
   expect(posted).toHaveLength(0);
   play(block(5, 0.1));
   expect(posted).toHaveLength(1);
-  expect(posted[0]).toMatchObject({ kind: "heard", seconds: 0.01, frames: [{ hz: 220 }, { hz: 220 }] });
+  expect(posted[0]).toMatchObject({ kind: "heard", seconds: 0.015, frames: [{ hz: 220 }] });
   expect((posted[0] as { peak: number }).peak).toBeCloseTo(0.9, 6);
+  play(block(20));
+  expect(posted.at(-1)).toMatchObject({ seconds: 0.035, frames: [] });
 });
 
 it("waits for the blocks that are still on their way before it judges", () => {

@@ -1,14 +1,15 @@
-import type { LiveFrame } from "@/shared/voice/liveTracker";
+import type { LiveFrame, LiveTracker } from "@/shared/voice/liveTracker";
 import type { TakeReport } from "@/shared/voice/takeReport";
 import { longestTakeS } from "./takeProtocol";
 import type { FromTakeWorker, TakePart, TakeSound, ToTakeWorker } from "./takeProtocol";
 
-const tellEveryS = 0.009;
+const tellEveryS = 0.02;
 
 /** What the listener needs of the engine and of the device; the worker passes the real ones. */
 export interface TakeTools {
-  createTracker(sampleRate: number): { push(pcm: Float32Array): LiveFrame[]; ahead(): LiveFrame[] };
-  judge(pcm: Float32Array, sampleRate: number): TakeReport;
+  createTracker(sampleRate: number): LiveTracker;
+  /** `measured` while the take was sung; null for sound that came as a whole */
+  judge(pcm: Float32Array, sampleRate: number, measured: ReturnType<LiveTracker["measured"]>): TakeReport;
   /** stores one second of sound on the device, against a reload */
   keepPart(id: string, index: number, pcm: Float32Array<ArrayBuffer>): void;
   /** runs the engine once on nothing that matters, so that its first real work is not its slowest */
@@ -37,9 +38,14 @@ interface OpenTake {
 export function createTakeListener(tools: TakeTools): (message: ToTakeWorker) => void {
   let take: OpenTake | null = null;
 
-  const judge = (pcm: Float32Array<ArrayBuffer>, sampleRate: number, part: TakePart | null = null) => {
+  const judge = (
+    pcm: Float32Array<ArrayBuffer>,
+    sampleRate: number,
+    part: TakePart | null = null,
+    measured: ReturnType<LiveTracker["measured"]> = null,
+  ) => {
     try {
-      const report = tools.judge(pcm, sampleRate);
+      const report = tools.judge(pcm, sampleRate, measured);
       tools.post({ kind: "judged", report, pcm, sampleRate, part }, [pcm.buffer]);
     } catch (fault) {
       tools.post({ kind: "broken", reason: String(fault) });
@@ -48,7 +54,7 @@ export function createTakeListener(tools: TakeTools): (message: ToTakeWorker) =>
   const finish = (open: OpenTake) => {
     take = null;
     open.sound.close();
-    judge(open.pcm.slice(0, open.length), open.sampleRate);
+    judge(open.pcm.slice(0, open.length), open.sampleRate, null, open.tracker.measured());
   };
   const drop = () => {
     take?.sound.close();
@@ -121,8 +127,8 @@ function listen(take: OpenTake, block: Float32Array<ArrayBuffer>, tools: TakeToo
     return;
   }
   take.level = louder(take.level, loudness(pcm));
-  // A frame comes every 10 ms; telling more often than that says nothing new.
-  if (take.length - take.told >= tellEveryS * take.sampleRate) {
+  // At once when there is a new frame, which is every 10 ms; before the first ones for the level alone.
+  if (take.pending.length > 0 || take.length - take.told >= tellEveryS * take.sampleRate) {
     const { pending: frames, level } = take;
     const ahead = take.tracker.ahead();
     tools.post({ kind: "heard", frames, ahead, seconds: take.length / take.sampleRate, ...level });

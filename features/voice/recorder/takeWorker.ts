@@ -11,8 +11,8 @@ interface WorkerScope {
 const scope = globalThis as unknown as WorkerScope;
 
 const tell = createTakeListener({
-  createTracker: createLiveTracker,
-  judge: (pcm, sampleRate) => listenToTake(pcm, sampleRate),
+  createTracker: (sampleRate) => createLiveTracker(sampleRate, { remember: true }),
+  judge: (pcm, sampleRate, measured) => listenToTake(pcm, sampleRate, { measured }),
   // Full or forbidden storage only costs the safety against a reload, never the take.
   keepPart: (id, index, pcm) => void appendUnkept(id, index, pcm).catch(() => undefined),
   warmUp: () => warmUp(),

@@ -3,9 +3,8 @@ import { existsSync, readFileSync, writeFileSync } from "node:fs";
 import { join } from "node:path";
 import { PitchDetector } from "pitchy";
 import { listenToTake } from "../../shared/voice/listenToTake";
-import type { Verdict } from "../../shared/voice/takeReport";
 import { readWav } from "../sound/wavFile";
-import type { ToolResult } from "./scoring";
+import { resultOf, type ToolResult } from "./scoring";
 
 /** What a tool made of the wav files it was given, in their order, and the processor time that it took. */
 export interface ToolRun {
@@ -19,16 +18,8 @@ export type Tool = (wavs: readonly string[], folder: string) => ToolRun | null;
 export const ours: Tool = (wavs) => {
   const warm = readWav(wavs[0]!);
   listenToTake(warm.pcm, warm.sampleRate);
-  return timed(wavs, (pcm, sampleRate) => {
-    const { f0, range, verdict } = listenToTake(pcm, sampleRate);
-    return { f0: f0.map((hz, k) => ({ t: k / 100, hz })), range, verdict: verdictOf(verdict) };
-  });
+  return timed(wavs, (pcm, sampleRate) => resultOf(listenToTake(pcm, sampleRate)));
 };
-
-function verdictOf(verdict: Verdict): ToolResult["verdict"] {
-  if (verdict === "heard") return "ok";
-  return verdict === "too-short" ? "too_little" : "no_singing";
-}
 
 /** pitchy's McLeod method as it comes: 2048 samples at 44.1 kHz, clarity from 0.9, 60 to 1400 Hz. */
 export const plainPitchy: Tool = (wavs) =>

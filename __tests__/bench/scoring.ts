@@ -1,3 +1,4 @@
+import type { TakeReport } from "../../shared/voice/takeReport";
 import type { ClipTruth } from "../sound/corpusLine";
 
 /** What a tool says about a clip. */
@@ -12,6 +13,15 @@ export interface ToolResult {
 
 const FARTHEST_S = 0.03;
 const SEMITONE_CENTS = 50;
+
+/** What our own engine says, in the words of the corpus. */
+export function resultOf({ f0, range, verdict }: TakeReport): ToolResult {
+  return {
+    f0: f0.map((hz, k) => ({ t: k / 100, hz })),
+    range,
+    verdict: verdict === "heard" ? "ok" : verdict === "too-short" ? "too_little" : "no_singing",
+  };
+}
 
 /** Counts over the frames of a clip, after the MIREX melody measures. */
 export interface FrameCounts {

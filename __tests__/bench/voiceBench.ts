@@ -1,17 +1,17 @@
-import { mkdtempSync, rmSync, writeFileSync } from "node:fs";
+import { mkdtempSync, rmSync } from "node:fs";
 import { tmpdir } from "node:os";
 import { join, resolve } from "node:path";
 import { parseArgs } from "node:util";
 import { corpus } from "../sound/corpus";
-import type { CorpusHalf } from "../sound/corpusClip";
+import type { Clip } from "../sound/corpusClip";
 import { writeWav } from "../sound/wavFile";
-import { benchTable, type TableRow } from "./benchTable";
+import { barsTable, comparisonTable, measuresTable, type TableRow } from "./benchTable";
 import { folderClips, type BenchClip } from "./folderClips";
 import { rangeByExtremes, rangeByHeldNotes } from "./heldNotes";
 import { aubioYinFft, ours, plainPitchy, praatAutocorrelation, type Tool } from "./plainTools";
 import { countFrames, rangeErrors, rangeRight, type Scored } from "./scoring";
 
-const USAGE = "bench:voice [--dev] [--held-out] [--only TAG] [--folder DIR] [--ours] [--failures] [--json FILE]";
+const USAGE = "bench:voice [--dev] [--held-out] [--only TAG] [--folder DIR] [--ours] [--failures]";
 const CONDITIONS = [
   "clean",
   "noise20",
@@ -36,30 +36,45 @@ const CONDITIONS = [
 ];
 const VOICES = ["bass", "baritone", "tenor", "alto", "mezzo", "soprano", "child"];
 
-const { values: options } = parseArgs({
-  options: {
-    dev: { type: "boolean" },
-    "held-out": { type: "boolean" },
-    only: { type: "string" },
-    folder: { type: "string" },
-    ours: { type: "boolean" },
-    failures: { type: "boolean" },
-    json: { type: "string" },
-    help: { type: "boolean" },
-  },
-});
-if (options.help) process.stdout.write(`${USAGE}\n`);
+const options = readOptions();
+if (options === null || options.help) process.stdout.write(`${USAGE}\n`);
 else {
-  measure().catch((error: Error) => {
+  measure(options).catch((error: Error) => {
     process.stderr.write(`${error.message}\n`);
     process.exitCode = 1;
   });
 }
 
-async function measure(): Promise<void> {
-  const clips = (
-    options.folder ? await folderClips(resolve(process.env.INIT_CWD ?? ".", options.folder)) : madeClips()
-  ).filter(({ name, tags }) => !options.only || tags.includes(options.only) || name === options.only);
+interface Options {
+  dev?: boolean;
+  "held-out"?: boolean;
+  only?: string;
+  folder?: string;
+  ours?: boolean;
+  failures?: boolean;
+  help?: boolean;
+}
+
+function readOptions(): Options | null {
+  const flag = { type: "boolean" } as const;
+  const text = { type: "string" } as const;
+  try {
+    const known = { dev: flag, "held-out": flag, only: text, folder: text, ours: flag, failures: flag, help: flag };
+    return parseArgs({ options: known }).values as Options;
+  } catch (error) {
+    process.stderr.write(`${(error as Error).message}\n`);
+    process.exitCode = 2;
+    return null;
+  }
+}
+
+async function measure(options: Options): Promise<void> {
+  const { folder: from, only } = options;
+  const wanted = ({ name, tags }: { name: string; tags: string[] }): boolean =>
+    !only || tags.includes(only) || name === only;
+  const clips = from
+    ? (await folderClips(resolve(process.env.INIT_CWD ?? ".", from))).filter(wanted)
+    : madeClips(options, wanted);
   if (clips.length === 0) throw new Error("No clip carries that tag or name.");
   const folder = mkdtempSync(join(tmpdir(), "voice-bench-"));
   try {
@@ -68,43 +83,45 @@ async function measure(): Promise<void> {
       writeWav(path, pcm, sampleRate);
       return path;
     });
-    report(clips, runTools(clips, wavs, folder));
+    report(clips, runTools(clips, wavs, folder, options), options);
   } finally {
     rmSync(folder, { recursive: true });
   }
 }
 
-function madeClips(): BenchClip[] {
+function madeClips(options: Options, wanted: (clip: Clip) => boolean): BenchClip[] {
   const both = !options.dev && !options["held-out"];
-  const halves = (["dev", "held-out"] as CorpusHalf[]).filter((half) => both || options[half as "dev" | "held-out"]);
-  return halves
-    .flatMap(corpus)
-    .filter(({ name, tags }) => !options.only || tags.includes(options.only) || name === options.only)
-    .flatMap(({ name, half, tags, make }) => {
-      const sound = make();
-      if (sound === null) process.stderr.write(`${name}: the program that makes it is not installed; left out\n`);
-      return sound === null ? [] : [{ name: `${half}/${name}`, tags: [...tags, name], ...sound }];
-    });
+  const halves = (["dev", "held-out"] as const).filter((half) => both || options[half]);
+  const clips = halves.flatMap(corpus).filter(wanted);
+  return clips.flatMap(({ name, half, tags, make }) => {
+    const sound = make();
+    if (sound === null) process.stderr.write(`${name}: the program that makes it is not installed; left out\n`);
+    return sound === null ? [] : [{ name: `${half}/${name}`, tags, ...sound }];
+  });
 }
 
-interface ToolScores extends TableRow {
-  scored: Scored[];
-}
+type ToolScores = TableRow & { scored: Scored[]; byExtremes: Scored[] };
 
-function runTools(clips: readonly BenchClip[], wavs: readonly string[], folder: string): ToolScores[] {
+function runTools(
+  clips: readonly BenchClip[],
+  wavs: readonly string[],
+  folder: string,
+  options: Options,
+): ToolScores[] {
   const seconds = clips.reduce((sum, { pcm, sampleRate }) => sum + pcm.length / sampleRate, 0);
   const tools: [string, Tool][] = [["Larkspan", ours]];
-  if (!options.ours)
+  if (!options.ours) {
     tools.push(
       ["Praat ac 60-1200 Hz", praatAutocorrelation],
       ["aubio YIN-FFT", aubioYinFft],
       ["pitchy MPM, clarity 0.9", plainPitchy],
     );
-  return tools.flatMap(([tool, run]) => {
-    process.stderr.write(`${tool}: ${clips.length} clips, ${seconds.toFixed(0)} s of sound\n`);
+  }
+  return tools.flatMap(([name, run]) => {
+    process.stderr.write(`${name}: ${clips.length} clips, ${seconds.toFixed(0)} s of sound\n`);
     const outcome = run(wavs, folder);
     if (outcome === null) {
-      process.stderr.write(`${tool} is not installed; left out\n`);
+      process.stderr.write(`${name} is not installed; left out\n`);
       return [];
     }
     const score = (range: typeof rangeByExtremes | null): Scored[] =>
@@ -112,51 +129,40 @@ function runTools(clips: readonly BenchClip[], wavs: readonly string[], folder: 
         const track = outcome.tracks[k]!;
         return { truth, result: { ...track, range: range ? range(track.f0) : track.range } };
       });
-    return [
-      {
-        tool,
-        scored: score(tool === "Larkspan" ? null : rangeByHeldNotes),
-        byExtremes: score(rangeByExtremes),
-        timesRealTime: seconds / outcome.cpuS,
-      },
-    ];
+    const scored = score(name === "Larkspan" ? null : rangeByHeldNotes);
+    return [{ name, scored, byExtremes: score(rangeByExtremes), timesRealTime: seconds / outcome.cpuS }];
   });
 }
 
-function report(clips: readonly BenchClip[], rows: readonly ToolScores[]): void {
-  const say = (text: string): boolean => process.stdout.write(`${text}\n`);
-  say(`\n## All ${clips.length} clips\n\n${benchTable(rows)}`);
-  for (const tag of [...CONDITIONS, ...VOICES]) {
-    const among = clips.map(({ tags, truth }) => tags.includes(tag) && truth.expected.verdict === "ok");
-    if (!among.includes(true)) continue;
-    const part = rows.map(({ tool, scored, byExtremes }) => ({
-      tool,
-      scored: scored.filter((_, k) => among[k]),
-      byExtremes: byExtremes!.filter((_, k) => among[k]),
-    }));
-    say(`\n## ${tag}\n\n${benchTable(part)}`);
+function report(clips: readonly BenchClip[], rows: readonly ToolScores[], options: Options): void {
+  const say = (title: string, text: string): boolean => process.stdout.write(`\n## ${title}\n\n${text}\n`);
+  const own = rows[0]!;
+  say(`All ${clips.length} clips`, measuresTable("tool", rows));
+  const singingWith = (tag: string) => (_: unknown, k: number) =>
+    clips[k]!.tags.includes(tag) && clips[k]!.truth.expected.verdict === "ok";
+  const conditions = [...CONDITIONS, ...VOICES].filter((tag) => own.scored.some(singingWith(tag)));
+  const part = (row: ToolScores, tag: string): TableRow => ({
+    name: tag,
+    scored: row.scored.filter(singingWith(tag)),
+    byExtremes: row.byExtremes.filter(singingWith(tag)),
+  });
+  say(
+    "Larkspan by condition",
+    measuresTable(
+      "condition",
+      conditions.map((tag) => part(own, tag)),
+    ),
+  );
+  if (rows.length > 1) {
+    const names = rows.map(({ name }) => name);
+    const byCondition = conditions.map((tag) => ({ name: tag, byTool: rows.map((row) => part(row, tag).scored) }));
+    say("RPA % by condition", comparisonTable("rpa", names, byCondition));
+    say("Octave errors % by condition", comparisonTable("octaveErrors", names, byCondition));
+    say("Both ends of the range within a semitone, by notes, %", comparisonTable("bothEnds", names, byCondition));
   }
-  const own = rows[0]!.scored;
-  if (options.failures)
-    say(
-      `\n## Where Larkspan falls short, clip by clip\n\n${clips.flatMap((clip, k) => failure(clip, own[k]!)).join("\n")}`,
-    );
-  if (options.json)
-    writeFileSync(
-      options.json,
-      JSON.stringify(
-        rows.map(({ tool, scored }) => ({
-          tool,
-          clips: scored.map(({ truth, result }, k) => ({
-            name: clips[k]!.name,
-            ...countFrames(truth, result.f0),
-            range: result.range,
-            expected: truth.expected,
-            verdict: result.verdict,
-          })),
-        })),
-      ),
-    );
+  say("The bars", barsTable(own.scored.map((score, k) => ({ ...score, tags: clips[k]!.tags }))));
+  const failures = clips.flatMap((clip, k) => failure(clip, own.scored[k]!));
+  if (options.failures) say("Where Larkspan falls short, clip by clip", failures.join("\n") || "Nowhere.");
 }
 
 function failure(clip: BenchClip, { truth, result }: Scored): string[] {

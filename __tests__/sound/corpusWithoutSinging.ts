@@ -1,6 +1,6 @@
 import { CORPUS_RATE, clipRandom, type Clip, type CorpusHalf } from "./corpusClip";
 import { silentTruth } from "./corpusLine";
-import { addMains, addNoise, hall, phoneMicrophone } from "./corpusRoom";
+import { addMains, addNoise, hall, laptopMicrophone, phoneMicrophone } from "./corpusRoom";
 import { beeps, breathing, clapping, fanAlone, picking, room, strumming, whistling } from "./corpusSounds";
 import { claps, silence, speech, typing } from "./noSinging";
 import type { Random } from "./random";
@@ -24,10 +24,13 @@ const SOUNDS: Record<string, Maker> = {
   beeps: (random) => beeps(rate, durationS, random),
   strumming: (random) => strumming(rate, durationS, random),
   "strumming-phone": (random) => phoneMicrophone(strumming(rate, durationS, random), rate, random),
+  "strumming-hall": (random) => hall(strumming(rate, durationS, random), rate, random.between(0.5, 1.2), 0.3, random),
+  "whistle-2": (random) => whistling(rate, durationS, random),
+  "beeps-2": (random) => beeps(rate, durationS, random),
   picking: (random) => picking(rate, durationS, random),
 };
 
-/** Lines to be spoken, and for each half five of espeak-ng's voices with words per minute and what the room does. */
+/** Lines to be spoken, and for each half eight of espeak-ng's voices with words per minute and what the room does. */
 const LINES = [
   "The ferry leaves at half past nine, and nobody has found the lamp that hung beside the gangway since Tuesday.",
   "Would you put the kettle on before the others come? There are seven cups on the shelf and one in the sink.",
@@ -35,13 +38,17 @@ const LINES = [
   "Well, that is wonderful news! When did she write to you, and why on earth did you not tell us?",
   "One, two, three, four. The rope is tied to the second ring, and the third one is for the small boat.",
 ];
-const SPEAKERS: Record<CorpusHalf, [string, number, "plain" | "noise" | "phone" | "hall"][]> = {
+type Place = "plain" | "noise" | "phone" | "laptop" | "hall";
+const SPEAKERS: Record<CorpusHalf, [string, number, Place][]> = {
   dev: [
     ["en", 150, "plain"],
     ["en-us+f2", 170, "noise"],
     ["en+m3", 130, "phone"],
     ["de+f1", 160, "hall"],
     ["en+f5", 145, "plain"],
+    ["it+m2", 140, "hall"],
+    ["es+f4", 150, "plain"],
+    ["sv", 160, "laptop"],
   ],
   "held-out": [
     ["en-gb-scotland", 155, "plain"],
@@ -49,6 +56,9 @@ const SPEAKERS: Record<CorpusHalf, [string, number, "plain" | "noise" | "phone" 
     ["en-us+m5", 165, "noise"],
     ["en+m1", 120, "plain"],
     ["fr+f3", 150, "phone"],
+    ["nl+m4", 150, "hall"],
+    ["pt+f1", 145, "plain"],
+    ["da+f2", 155, "laptop"],
   ],
 };
 
@@ -66,19 +76,20 @@ export function quietClips(half: CorpusHalf): Clip[] {
       name,
       half,
       tags: ["nonvoice", "speech"],
-      make: () => speak(LINES[k]!, voice, words, place, clipRandom(half, name)),
+      make: () => speak(LINES[k % LINES.length]!, voice, words, place, clipRandom(half, name)),
     };
   });
   return [...plain, ...spoken];
 }
 
-function speak(line: string, voice: string, words: number, place: string, random: Random) {
+function speak(line: string, voice: string, words: number, place: Place, random: Random) {
   const spoken = speech(line, voice, words);
   if (spoken === null) return null;
   const { sampleRate } = spoken;
   let { pcm } = spoken;
   if (place === "noise") pcm = addNoise(pcm, sampleRate, 20, random);
   if (place === "phone") pcm = phoneMicrophone(pcm, sampleRate, random);
-  if (place === "hall") pcm = hall(pcm, sampleRate, 0.7, 0.35, random);
+  if (place === "laptop") pcm = laptopMicrophone(pcm, sampleRate, random);
+  if (place === "hall") pcm = hall(pcm, sampleRate, random.between(0.3, 0.9), 0.35, random);
   return { pcm, sampleRate, truth: silentTruth(pcm.length / sampleRate) };
 }

@@ -1,12 +1,39 @@
 import { QueryClientProvider } from "@tanstack/react-query";
 import { Slot } from "expo-router";
+import { useEffect } from "react";
 import { queryClient } from "@/features/api/queryClient";
 import { SessionProvider, useSession } from "@/features/api/SessionProvider";
+import { fetchWhenIdle, type LazyPart } from "@/features/ui/fetchWhenIdle";
 import { Shell } from "@/features/ui/Shell";
 import { ThemeProvider } from "@/features/ui/ThemeProvider";
 
+/** Everything that is fetched on demand: once it is here, the whole product works without a connection. */
+const parts: LazyPart[] = [
+  () => import("./songs/index"),
+  () => import("./songs/[id]/index"),
+  () => import("@/shared/songs/demoSongs"),
+  () => import("./songs/[id]/keys"),
+  () => import("./songs/[id]/ways"),
+  () => import("@/shared/ways/findWays"),
+  () => import("./songs/[id]/edit"),
+  () => import("./songs/new"),
+  () => import("@/shared/songs/melodyFile"),
+  () => import("./voice/index"),
+  () => import("./voice/sing"),
+  () => import("./voice/guided"),
+  () => import("./voice/by-hand"),
+  () => import("./voice/upload"),
+  () => import("./index"),
+  () => import("./instruments"),
+  () => import("./account/index"),
+  () => import("./account/sign-in"),
+  () => import("./account/sign-up"),
+  () => import("./+not-found"),
+];
+
 function Surroundings() {
   const { account } = useSession();
+  useEffect(() => fetchWhenIdle(parts), []);
   return (
     <Shell initial={account ? account.email.charAt(0).toUpperCase() : null}>
       <Slot />

@@ -3,6 +3,7 @@ import { decidedOn } from "@/features/keys/decide";
 import { decisionFor, decisionQueries } from "@/features/keys/decisionQueries";
 import { ShelfStrip } from "@/features/keys/ShelfStrip";
 import { keyInHand, keyRowsOf } from "@/features/keys/songKeys";
+import { SignedOutNotice } from "@/features/songs/SignedOut";
 import { SongShelf, type ShelfKey } from "@/features/songs/SongShelf";
 import { songQueries } from "@/features/songs/songQueries";
 import { LinkButton } from "@/features/ui/LinkButton";
@@ -39,6 +40,7 @@ export default function SongsRoute() {
         )
       }
     >
+      <SignedOutNotice />
       <QueryState
         query={songs}
         title="Your songs could not be opened"

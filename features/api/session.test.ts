@@ -40,13 +40,19 @@ describe("at the start", () => {
     expect(api.calls).toEqual(["POST /auth/refresh"]);
   });
 
-  it("says that a session ended, and asks no more after that", async () => {
+  it("says that a session ended, and says so again without asking until somebody signs in or stays out", async () => {
     await openPage().session.signUp({ email, password });
     api.endSessions();
     expect(await openPage().session.settled()).toMatchObject({ status: "visitor", ended: true });
     api.calls.length = 0;
-    expect(await openPage().session.settled()).toMatchObject({ status: "visitor", ended: false });
+    const again = openPage().session;
+    expect(await again.settled()).toMatchObject({ status: "visitor", ended: true });
     expect(api.calls).toEqual([]);
+    again.stayOut();
+    expect(again.current()).toMatchObject({ status: "visitor", ended: false });
+    expect(await openPage().session.settled()).toMatchObject({ ended: false });
+    await again.signIn({ email, password });
+    expect(await openPage().session.settled()).toMatchObject({ status: "signed-in", ended: false });
   });
 
   it("does not take a person for a visitor while the server is away, and tries again when asked again", async () => {
@@ -167,6 +173,15 @@ describe("signing out", () => {
     // A browser tells every tab but the one that wrote.
     window.dispatchEvent(new StorageEvent("storage", { key: "larkspan.has-session", newValue: null }));
     expect(second.session.current()).toMatchObject({ status: "visitor", ended: false });
+    unfollow();
+  });
+
+  it("is told from a session that ran out in another tab", async () => {
+    const { session } = openPage();
+    await session.signUp({ email, password });
+    const unfollow = session.followOtherTabs();
+    window.dispatchEvent(new StorageEvent("storage", { key: "larkspan.has-session", newValue: "ended" }));
+    expect(session.current()).toMatchObject({ status: "visitor", ended: true });
     unfollow();
   });
 });

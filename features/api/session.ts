@@ -3,7 +3,7 @@ import { ApiError } from "./apiError";
 import { http } from "./httpClient";
 import { sessionHint } from "./sessionHint";
 
-/** Who is here. "unknown" until the server was asked; `ended` says that a session ran out without being signed out. */
+/** Who is here. "unknown" until the server was asked; `ended` says that the last session here ran out without being signed out. */
 export interface Session {
   status: "unknown" | "visitor" | "signed-in";
   account: Account | null;
@@ -23,7 +23,8 @@ function publish(next: Session): Session {
 }
 
 function visitor(ended: boolean): Session {
-  sessionHint.clear();
+  if (ended) sessionHint.end();
+  else sessionHint.clear();
   return publish({ status: "visitor", account: null, ended, problem: null });
 }
 
@@ -35,11 +36,11 @@ function signedIn(answer: SessionResponse): Session {
 
 http.onSession((answer) => {
   if (answer) signedIn(answer);
-  else if (current.status !== "visitor") visitor(sessionHint.present());
+  else if (current.status !== "visitor") visitor(sessionHint.present() || sessionHint.ended());
 });
 
 async function ask(): Promise<Session> {
-  if (!sessionHint.present()) return visitor(false);
+  if (!sessionHint.present()) return visitor(sessionHint.ended());
   try {
     await http.refresh();
   } catch (error) {
@@ -66,11 +67,13 @@ async function signOut(): Promise<void> {
 
 /** Another tab signed in or out: this one follows. */
 function followOtherTabs(): () => void {
-  return sessionHint.onChange((present) => {
-    if (!present && current.status === "signed-in") {
+  return sessionHint.onChange((change) => {
+    if (change !== "opened" && current.status === "signed-in") {
       http.forget();
+      visitor(change === "ended");
+    } else if (change === "signed-out" && current.ended) {
       visitor(false);
-    } else if (present && current.status === "visitor") {
+    } else if (change === "opened" && current.status === "visitor") {
       http.refresh().catch(() => undefined);
     }
   });
@@ -89,5 +92,7 @@ export const session = {
   signIn: async (request: SignInRequest) =>
     signedIn(await http.authenticate<SessionResponse>("/auth/sign-in", request)),
   signOut,
+  /** Whoever was signed in here goes on as a visitor. */
+  stayOut: () => void visitor(false),
   followOtherTabs,
 };

@@ -1,11 +1,13 @@
 import type { ReactNode } from "react";
 import { ApiError } from "@/features/api/apiError";
+import { useSession } from "@/features/api/SessionProvider";
 import { EmptyState } from "@/features/ui/EmptyState";
 import { LinkButton } from "@/features/ui/LinkButton";
 import { QueryState, type QueryLike } from "@/features/ui/QueryState";
 import { Screen } from "@/features/ui/Screen";
 import { Skeleton } from "@/features/ui/Skeleton";
 import type { Song } from "@/shared/contract/song";
+import { SignedOutState } from "./SignedOut";
 
 export interface SongStateProps {
   query: QueryLike<Song>;
@@ -16,8 +18,15 @@ export interface SongStateProps {
 
 /** A page about one song: while it comes, when it cannot be had, and when it is not, or no longer, on this shelf. */
 export function SongState({ query, title, children }: SongStateProps) {
+  const { ended } = useSession();
   if (query.data !== undefined) return <>{children(query.data)}</>;
   const missing = query.error instanceof ApiError && query.error.status === 404;
+  if (missing && ended)
+    return (
+      <Screen title={title} crumb={{ label: "Songs", href: "/songs" }} wide>
+        <SignedOutState />
+      </Screen>
+    );
   return (
     <Screen title={missing ? "No such song" : title} crumb={{ label: "Songs", href: "/songs" }} wide>
       {missing ? (

@@ -1,4 +1,6 @@
-import { queryOptions, useMutation, useQueryClient } from "@tanstack/react-query";
+import { queryOptions, useMutation, useQueryClient, type QueryClient } from "@tanstack/react-query";
+import { ApiError } from "@/features/api/apiError";
+import { queryClient } from "@/features/api/queryClient";
 import { shelf } from "@/features/api/shelf";
 import type { Song } from "@/shared/contract/song";
 import { seedDemoSongs } from "./demoShelf";
@@ -12,8 +14,26 @@ export const songQueries = {
         return byTitle(await shelf.list("songs"));
       },
     }),
-  detail: (id: string) => queryOptions({ queryKey: ["songs", id], queryFn: () => shelf.get("songs", id) }),
+  detail: (id: string) =>
+    queryOptions({
+      queryKey: ["songs", id],
+      queryFn: async ({ client }) => {
+        try {
+          return await shelf.get("songs", id);
+        } catch (error) {
+          // Without a connection the shelf as it was last seen still holds the whole song.
+          const known = error instanceof ApiError && error.code === "offline" ? onShelf(client, id) : undefined;
+          if (known) return known;
+          throw error;
+        }
+      },
+      placeholderData: () => onShelf(queryClient, id),
+    }),
 };
+
+function onShelf(client: QueryClient, id: string): Song | undefined {
+  return client.getQueryData<Song[]>(["songs"])?.find((song) => song.id === id);
+}
 
 /** Keeps a song. A key that was decided stays with it. */
 export function useSaveSong() {

@@ -1,4 +1,4 @@
-import { fireEvent, render, screen } from "@testing-library/react";
+import { cleanup, fireEvent, render, screen, waitFor } from "@testing-library/react";
 import type { AnchorHTMLAttributes, ReactNode } from "react";
 import { isMissingChunk, MissingChunkBoundary } from "./MissingChunkBoundary";
 import { places } from "./places";
@@ -134,6 +134,59 @@ describe("what breaks below the shell", () => {
   function Broken(): ReactNode {
     throw new Error("a bug");
   }
+  function Missing(): ReactNode {
+    throw new Error("Loading module /x.js failed.");
+  }
+  const openMissing = () => {
+    const reload = jest.fn();
+    render(
+      <MissingChunkBoundary path="/songs/7" reload={reload}>
+        <Missing />
+      </MissingChunkBoundary>,
+    );
+    return reload;
+  };
+  const answerWith = (answer: () => Promise<{ status: number }>) => {
+    globalThis.fetch = jest.fn(answer) as unknown as typeof fetch;
+  };
+  let quiet: jest.SpyInstance;
+  beforeEach(() => {
+    sessionStorage.clear();
+    quiet = jest.spyOn(console, "error").mockImplementation(() => undefined);
+  });
+  afterEach(() => {
+    quiet.mockRestore();
+    jest.restoreAllMocks();
+    Reflect.deleteProperty(globalThis, "fetch");
+  });
+
+  it("is never reloaded while offline, and can be tried again when the page answers", async () => {
+    jest.spyOn(navigator, "onLine", "get").mockReturnValue(false);
+    answerWith(async () => ({ status: 200 }));
+    const reload = openMissing();
+    expect(await screen.findByText("Larkspan cannot be reached")).toBeTruthy();
+    expect(fetch).not.toHaveBeenCalled();
+    jest.spyOn(navigator, "onLine", "get").mockReturnValue(true);
+    answerWith(() => Promise.reject(new TypeError("no network")));
+    fireEvent.click(screen.getByRole("button", { name: "Try again" }));
+    await waitFor(() => expect(fetch).toHaveBeenCalled());
+    expect(await screen.findByText("Larkspan cannot be reached")).toBeTruthy();
+    expect(reload).not.toHaveBeenCalled();
+    answerWith(async () => ({ status: 200 }));
+    fireEvent.click(screen.getByRole("button", { name: "Try again" }));
+    await waitFor(() => expect(reload).toHaveBeenCalledTimes(1));
+  });
+
+  it("is fetched by one reload after a new version, and not by a second one", async () => {
+    answerWith(async () => ({ status: 200 }));
+    const first = openMissing();
+    await waitFor(() => expect(first).toHaveBeenCalledTimes(1));
+    cleanup();
+    const second = openMissing();
+    await waitFor(() => expect(fetch).toHaveBeenCalledTimes(2));
+    expect(await screen.findByText("This page could not be fetched")).toBeTruthy();
+    expect(second).not.toHaveBeenCalled();
+  });
 
   it("tells a missing part of the program from another error", () => {
     const missing = new Error("Loading module /x.js failed.");
@@ -145,7 +198,6 @@ describe("what breaks below the shell", () => {
   });
 
   it("is said in words, with a way out, until another page is opened", () => {
-    const quiet = jest.spyOn(console, "error").mockImplementation(() => undefined);
     const { rerender } = render(
       <MissingChunkBoundary path="/songs">
         <Broken />
@@ -159,6 +211,5 @@ describe("what breaks below the shell", () => {
       </MissingChunkBoundary>,
     );
     expect(screen.getByText("Your voice")).toBeTruthy();
-    quiet.mockRestore();
   });
 });

@@ -18,8 +18,8 @@ export function MovingVoice({ takes }: MovingVoiceProps) {
     <Notice kind="good" title="Your voice is moving" testID="voice-moving">
       <Text variant="small">{`${moved.map(movedWords).join(" ")} Voices change, most of all while growing up.`}</Text>
       <Text variant="small" tone="soft">
-        Sing again every six to eight weeks. Where the old notes are no longer yours, erase the older takes or start a new
-        voice, and your keys follow. Nothing has to be reached again.
+        Sing again every six to eight weeks. Where the old notes are no longer yours, erase the older takes or start a
+        new voice, and your keys follow. Nothing has to be reached again.
       </Text>
     </Notice>
   );

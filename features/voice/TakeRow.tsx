@@ -82,7 +82,8 @@ export function TakeRow({ take, without, busy, onErase, onChange }: TakeRowProps
 }
 
 function factsOf({ sungAt, effort, warmedUp, kind, shows }: Take): string {
-  const what = kind === "hold" ? { both: "guided hold", low: "guided hold, low end", high: "guided hold, high end" }[shows] : null;
+  const what =
+    kind === "hold" ? { both: "guided hold", low: "guided hold, low end", high: "guided hold, high end" }[shows] : null;
   const felt = effort === null ? null : `felt ${effort} of 5, ${effortWords[effort - 1]}`;
   return [what, whenWords(sungAt), warmedWords(warmedUp), felt].filter((fact) => fact !== null).join(" · ");
 }

@@ -68,7 +68,12 @@ function NoVoiceYet() {
         action={
           <View style={{ gap: 8 }}>
             <LinkButton icon="mic" label="Sing a few seconds" href="/voice/sing" testID="voice-sing" />
-            <LinkButton kind="text" label="Find your lowest and highest note" href="/voice/guided" testID="voice-guided" />
+            <LinkButton
+              kind="text"
+              label="Find your lowest and highest note"
+              href="/voice/guided"
+              testID="voice-guided"
+            />
             <LinkButton kind="text" label="Set notes by hand" href="/voice/by-hand" testID="voice-by-hand" />
           </View>
         }

@@ -28,12 +28,16 @@ it("names the take, the seconds the note was held, and what would be without it"
 
 it("says that a guided hold decides against a phrase that went a little farther", () => {
   const takes = [sung(50, 64), sung(50, 63, { kind: "hold", certainty: 0.9 })];
-  expect(why(takes, "high")).toMatch(/^You held E♭4 for 2\.1 s in the guided hold of .* A phrase of .* went up to E4; .* the guided hold decides\./);
+  expect(why(takes, "high")).toMatch(
+    /^You held E♭4 for 2\.1 s in the guided hold of .* A phrase of .* went up to E4; .* the guided hold decides\./,
+  );
 });
 
 it("says that a far outlier counts only in part", () => {
   const takes = [sung(50, 62), sung(50, 62), sung(50, 75)];
-  expect(why(takes, "high")).toMatch(/^You held E♭5 for 2\.1 s .* counts only in part, as F♯4, until another one confirms it\./);
+  expect(why(takes, "high")).toMatch(
+    /^You held E♭5 for 2\.1 s .* counts only in part, as F♯4, until another one confirms it\./,
+  );
 });
 
 it("takes the singer's own tuning off before it names a note", () => {
@@ -48,7 +52,11 @@ it("agrees with what is left when a take is really erased", () => {
 
 it("explains the comfortable notes by effort", () => {
   expect(whyComfort([sung(50, 62)]).join(" ")).toMatch(/have not said how the singing felt/);
-  const rated = whyComfort([sung(50, 62, { effort: 1 }), sung(50, 62, { effort: 5 }), sung(50, 62, { effort: 4 })]).join(" ");
+  const rated = whyComfort([
+    sung(50, 62, { effort: 1 }),
+    sung(50, 62, { effort: 5 }),
+    sung(50, 62, { effort: 4 }),
+  ]).join(" ");
   expect(rated).toMatch(/One take felt easy/);
   expect(rated).toMatch(/2 takes felt hard/);
 });

@@ -18,13 +18,13 @@ export function whyEnd(profile: VoiceProfile, takes: readonly Take[], end: Voice
   const way = end === "low" ? "down" : "up";
   const sentences = [sungWords(from, end, own)];
   if (own !== here) {
-    sentences.push(
-      `No other take came near it, so it counts only in part, as ${here}, until another one confirms it.`,
-    );
+    sentences.push(`No other take came near it, so it counts only in part, as ${here}, until another one confirms it.`);
   }
   const side = end === "low" ? -1 : 1;
   const farther = takes
-    .filter((take) => take.id !== from.id && speaksFor(take, end) && side * (ownEnd(take, end) - endOf(profile, end)) > 0.5)
+    .filter(
+      (take) => take.id !== from.id && speaksFor(take, end) && side * (ownEnd(take, end) - endOf(profile, end)) > 0.5,
+    )
     .sort((a, b) => side * (ownEnd(b, end) - ownEnd(a, end)))[0];
   if (farther && from.kind === "hold") {
     sentences.push(
@@ -41,14 +41,19 @@ export function whyEnd(profile: VoiceProfile, takes: readonly Take[], end: Voice
 
 /** What the voice is without one of its takes; null where nothing would be left. */
 export function withoutTake(takes: readonly Take[], gone: Take): VoiceProfile | null {
-  return profileOf({ id: gone.voiceId }, takes.filter(({ id }) => id !== gone.id));
+  return profileOf(
+    { id: gone.voiceId },
+    takes.filter(({ id }) => id !== gone.id),
+  );
 }
 
 function sungWords(take: Take, end: VoiceEnd, name: string): string {
   const raw = end === "low" ? take.range.lowMidi : take.range.highMidi;
   const held = Math.max(
     0,
-    ...take.notes.filter(({ clear, midi }) => clear && Math.abs(midi - raw) < 0.5).map(({ start, end: to }) => to - start),
+    ...take.notes
+      .filter(({ clear, midi }) => clear && Math.abs(midi - raw) < 0.5)
+      .map(({ start, end: to }) => to - start),
   );
   const how = take.kind === "hold" ? "in the guided hold" : "in the phrase";
   return held > 0

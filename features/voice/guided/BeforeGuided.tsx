@@ -1,12 +1,11 @@
 import { useState } from "react";
 import { View } from "react-native";
 import { Button } from "@/features/ui/Button";
-import { Heading } from "@/features/ui/Heading";
-import { LinkButton } from "@/features/ui/LinkButton";
 import { Notice } from "@/features/ui/Notice";
 import { Screen } from "@/features/ui/Screen";
 import { Segmented } from "@/features/ui/Segmented";
 import { Text } from "@/features/ui/Text";
+import { TextLink } from "@/features/ui/TextLink";
 import { useLayout } from "@/features/ui/useLayout";
 
 export interface BeforeGuidedProps {
@@ -25,18 +24,7 @@ export function BeforeGuided({ from, onStart }: BeforeGuidedProps) {
       title="Lowest and highest note"
       crumb={{ label: "Voice", href: "/voice" }}
       wide
-      footer={
-        <View style={{ flexDirection: "row", flexWrap: "wrap", gap: 10 }}>
-          <LinkButton kind="secondary" label="Sing a phrase instead" href="/voice/sing" />
-          <Button
-            icon="mic"
-            label="Start gently"
-            onPress={() => onStart(young)}
-            style={{ flexGrow: 1 }}
-            testID="guided-start"
-          />
-        </View>
-      }
+      footer={<Button icon="mic" label="Start gently" onPress={() => onStart(young)} testID="guided-start" />}
     >
       <View style={{ flexDirection: wide ? "row" : "column", gap: wide ? 48 : 20, paddingTop: 12 }}>
         <View style={[{ gap: 18 }, wide ? { flexBasis: 0, flexGrow: 1, maxWidth: 560 } : { maxWidth: 560 }]}>
@@ -45,9 +33,10 @@ export function BeforeGuided({ from, onStart }: BeforeGuidedProps) {
               ? "Hum one comfortable note. Then you hear a tone, sing it, and go down step by step; after a rest, up."
               : `You hear a tone, sing it, and go down step by step from ${from}; after a rest, up.`}
           </Text>
+          {!wide && <StopSigns />}
           <Text>
-            Hold each note for about two seconds. At each end you have two or three tries, and the best held note counts.
-            You can stop at any time, and what you held is kept.
+            Hold each note for about two seconds. At each end you have two or three tries, and the best held note
+            counts. You can stop at any time, and what you held is kept.
           </Text>
           <Text tone="soft">
             This shows what you can hold. Which of those notes you would use in a song, you say afterwards. The sound
@@ -72,38 +61,51 @@ export function BeforeGuided({ from, onStart }: BeforeGuidedProps) {
               </Text>
             )}
           </View>
+          {!wide && <Hearing />}
+          <TextLink href="/voice/sing">Sing a phrase instead</TextLink>
         </View>
-        <View style={[{ gap: 14 }, wide ? { flexBasis: 0, flexGrow: 1, maxWidth: 560 } : { maxWidth: 560 }]}>
-          <Notice kind="caution" title="When to stop" testID="guided-cautions">
-            <Heading level={2} size={16}>
-              Stop at once if
-            </Heading>
-            <View role="list" style={{ gap: 2 }}>
-              {stopSigns.map((sign) => (
-                <View key={sign} role="listitem" style={{ flexDirection: "row", gap: 8 }}>
-                  <Text variant="small" aria-hidden>
-                    •
-                  </Text>
-                  <Text variant="small" style={{ flexShrink: 1 }}>
-                    {sign}
-                  </Text>
-                </View>
-              ))}
-            </View>
-            <Text variant="small">Do not repeat an extreme note. Warm up first, and never push.</Text>
-            <Text variant="small" tone="soft">
-              If you are hoarse for more than about four weeks, see a doctor: so says the 2018 guideline on hoarseness of
-              the American Academy of Otolaryngology (AAO-HNS). Larkspan helps to practise; it does not replace a teacher
-              or a doctor.
-            </Text>
-          </Notice>
-          <Notice kind="caution" title="Headphones at a moderate level">
-            Headphones keep the tone out of the microphone. If you would have to raise your voice over them, they are too
-            loud.
-          </Notice>
-        </View>
+        {wide && (
+          <View style={{ gap: 14, flexBasis: 0, flexGrow: 1, maxWidth: 560 }}>
+            <StopSigns />
+            <Hearing />
+          </View>
+        )}
       </View>
     </Screen>
+  );
+}
+
+function StopSigns() {
+  return (
+    <Notice kind="caution" title="Stop at once if" testID="guided-cautions">
+      <View role="list" style={{ gap: 2 }}>
+        {stopSigns.map((sign) => (
+          <View key={sign} role="listitem" style={{ flexDirection: "row", gap: 8 }}>
+            <Text variant="small" aria-hidden>
+              •
+            </Text>
+            <Text variant="small" style={{ flexShrink: 1 }}>
+              {sign}
+            </Text>
+          </View>
+        ))}
+      </View>
+      <Text variant="small">Do not repeat an extreme note. Warm up first, and never push.</Text>
+      <Text variant="small" tone="soft">
+        If you are hoarse for more than about four weeks, see a doctor: so says the 2018 guideline on hoarseness of the
+        American Academy of Otolaryngology (AAO-HNS). Larkspan helps to practise; it does not replace a teacher or a
+        doctor.
+      </Text>
+    </Notice>
+  );
+}
+
+function Hearing() {
+  return (
+    <Notice kind="caution" title="Headphones at a moderate level">
+      Headphones keep the tone out of the microphone. If you would have to raise your voice over them, they are too
+      loud.
+    </Notice>
   );
 }
 

@@ -107,7 +107,14 @@ export function GuidedLadder({ run, live, listening, height }: GuidedLadderProps
                 strokeWidth={1.5}
                 strokeDasharray="2 5"
               />
-              <Circle cx={columnX + columnWidth / 2} cy={y(sung)} r={7} fill={colors.ink} stroke={colors.paper} strokeWidth={2} />
+              <Circle
+                cx={columnX + columnWidth / 2}
+                cy={y(sung)}
+                r={7}
+                fill={colors.ink}
+                stroke={colors.paper}
+                strokeWidth={2}
+              />
               <SvgLabel x={width - 4} y={y(sung) - 6} size={13} weight="600" anchor="end" fill={colors.ink} halo>
                 {`you: ${noteWord(sung)}`}
               </SvgLabel>

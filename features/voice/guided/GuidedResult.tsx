@@ -29,14 +29,21 @@ export function GuidedResult({ state, onFound }: GuidedResultProps) {
   const { notes } = takeOfHolds(run, findings, "");
   return (
     <View
-      style={{ flexDirection: wide ? "row" : "column", gap: wide ? 64 : 20, alignItems: wide ? "flex-start" : "stretch" }}
+      style={{
+        flexDirection: wide ? "row" : "column",
+        gap: wide ? 64 : 20,
+        alignItems: wide ? "flex-start" : "stretch",
+      }}
       testID="guided-result"
     >
       <VoiceLadder voice={{ range: reach, comfort: sing }} times={timeOnNotes(notes, 0)} ends="held" />
       <View style={[{ gap: 20 }, wide ? { flexGrow: 1, flexBasis: 0, maxWidth: 560 } : null]}>
         {brokenOff && (
           <Notice kind="caution" title="The sound broke off">
-            {`${causeWords(brokenOff, run.held.reduce((sum, { heldS }) => sum + heldS, 0))} What you held until then is here.`}
+            {`${causeWords(
+              brokenOff,
+              run.held.reduce((sum, { heldS }) => sum + heldS, 0),
+            )} What you held until then is here.`}
           </Notice>
         )}
         <View style={{ gap: 4 }}>
@@ -54,8 +61,8 @@ export function GuidedResult({ state, onFound }: GuidedResultProps) {
         <View style={{ gap: 10 }}>
           <Heading level={2}>You would sing with</Heading>
           <Text tone="soft">
-            Holding a note and using it in a song are two things. Set the lowest and the highest note you would use for a
-            whole song; a small reserve is proposed.
+            Holding a note and using it in a song are two things. Set the lowest and the highest note you would use for
+            a whole song; a small reserve is proposed.
           </Text>
           <NoteStepper
             label="Lowest"
@@ -80,7 +87,8 @@ export function GuidedResult({ state, onFound }: GuidedResultProps) {
           onChange={(warmed, felt) => onFound({ warmedUp: warmed, effort: felt })}
         />
         <Text variant="small" tone="soft">
-          Give the ends of your voice a rest now. If you are hoarse afterwards, rest your voice, and go less far next time.
+          Give the ends of your voice a rest now. If you are hoarse afterwards, rest your voice, and go less far next
+          time.
         </Text>
       </View>
     </View>
@@ -116,7 +124,12 @@ function NoteStepper({ label, midi, least, most, onChange, testID }: NoteStepper
       }}
     >
       <Text style={{ flexGrow: 1 }}>{label}</Text>
-      <IconButton icon="minus" label={`${label}: a semitone lower`} onPress={() => step(-1)} testID={`${testID}-down`} />
+      <IconButton
+        icon="minus"
+        label={`${label}: a semitone lower`}
+        onPress={() => step(-1)}
+        testID={`${testID}-down`}
+      />
       <Text variant="title" style={{ minWidth: 56, textAlign: "center" }} aria-live="polite" testID={testID}>
         {noteWord(midi)}
       </Text>

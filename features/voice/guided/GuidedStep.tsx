@@ -63,7 +63,9 @@ export function GuidedStep({ state, live, onTell }: GuidedStepProps) {
 
 /** How long the note is held: a mark where it counts, the end where the next one comes. */
 function HoldRow({ live, state }: { live: LiveSound; state: GuidedStepProps["state"] }) {
-  const now = useHeard(live, () => (state.step === "listening" ? Math.round(10 * (holdNow(live.frames)?.heldS ?? 0)) / 10 : 0));
+  const now = useHeard(live, () =>
+    state.step === "listening" ? Math.round(10 * (holdNow(live.frames)?.heldS ?? 0)) / 10 : 0,
+  );
   const held = state.step === "held" ? state.note.heldS : now;
   const share = Math.min(1, held / enoughHoldS);
   return (
@@ -102,7 +104,12 @@ function HoldRow({ live, state }: { live: LiveSound; state: GuidedStepProps["sta
 
 function LevelRow({ live, on }: { live: LiveSound; on: boolean }) {
   const level = useHeard(live, () => (on ? (live.peak >= 0.99 ? 0 : Math.round(live.levelDb)) : -120));
-  return <LevelMeter levelDb={level} />;
+  // Its room stays, so that nothing jumps when the tone ends.
+  return (
+    <View style={{ opacity: on ? 1 : 0 }} aria-hidden={!on}>
+      <LevelMeter levelDb={level} />
+    </View>
+  );
 }
 
 function Ways({ state, onTell }: Pick<GuidedStepProps, "state" | "onTell">) {
@@ -123,15 +130,25 @@ function Ways({ state, onTell }: Pick<GuidedStepProps, "state" | "onTell">) {
           testID="guided-again"
         />
       )}
-      {run.held.length > 0 && (
+      <View style={{ flexDirection: "row", gap: 10 }}>
+        {run.held.length > 0 && (
+          <Button
+            kind="secondary"
+            label={enoughWords(run.end)}
+            onPress={() => onTell({ kind: "enough" })}
+            style={{ flexGrow: 1 }}
+            testID="guided-enough"
+          />
+        )}
         <Button
-          kind="secondary"
-          label={enoughWords(run.end)}
-          onPress={() => onTell({ kind: "enough" })}
-          testID="guided-enough"
+          kind={run.held.length > 0 ? "text" : "secondary"}
+          icon="stop"
+          label="Stop here"
+          onPress={() => onTell({ kind: "finish" })}
+          style={run.held.length > 0 ? null : { flexGrow: 1 }}
+          testID="guided-stop"
         />
-      )}
-      <Button kind="text" icon="stop" label="Stop here" onPress={() => onTell({ kind: "finish" })} testID="guided-stop" />
+      </View>
     </View>
   );
 }

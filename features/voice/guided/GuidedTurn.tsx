@@ -23,13 +23,13 @@ export function GuidedTurn({ run, onTell }: GuidedTurnProps) {
       hideBar
       footer={
         <View style={{ flexDirection: "row", flexWrap: "wrap", gap: 10 }}>
-          <Button kind="secondary" label="Finish here" onPress={() => onTell({ kind: "finish" })} testID="guided-finish" />
           <Button
-            label="Now go up"
-            onPress={() => onTell({ kind: "up" })}
-            style={{ flexGrow: 1 }}
-            testID="guided-up"
+            kind="secondary"
+            label="Finish here"
+            onPress={() => onTell({ kind: "finish" })}
+            testID="guided-finish"
           />
+          <Button label="Now go up" onPress={() => onTell({ kind: "up" })} style={{ flexGrow: 1 }} testID="guided-up" />
         </View>
       }
     >

@@ -22,6 +22,9 @@ export type TryOutcome =
   | { kind: "unheard"; why: Exclude<Verdict, "heard"> };
 
 const sameNote = 0.6;
+/** A voice was there if so many frames of 10 ms have a pitch. */
+const soundedFrames = 25;
+const noHold = new Set<Verdict>(["heard", "not-singing", "too-short"]);
 /** Who does not sing the very note asked for may still be a step on: this far from it, the sung note itself counts. */
 const nearby = 3.5;
 
@@ -34,9 +37,11 @@ export interface Asked {
 /** Reads one try. Without `asked` any held note counts: the first comfortable hum. */
 export function readTry(report: TakeReport, asked: Asked | null): TryOutcome {
   const notes = report.notes.filter(({ sustained }) => sustained);
-  if (report.verdict !== "heard" && report.verdict !== "too-short") return { kind: "unheard", why: report.verdict };
-  if (notes.length === 0) {
-    return report.notes.length > 0 ? { kind: "unsteady" } : { kind: "unheard", why: "too-quiet" };
+  if (report.verdict !== "heard" || notes.length === 0) {
+    // A note that slides or breaks is no singing to the engine, but it is a try of this voice.
+    const sounded = report.f0.filter((hz) => hz !== null).length >= soundedFrames;
+    if (sounded && noHold.has(report.verdict)) return { kind: "unsteady" };
+    return { kind: "unheard", why: report.verdict === "heard" ? "too-short" : report.verdict };
   }
   const held = notes
     .map(({ start, end, midi, steadinessCents }) => ({ midi, heldS: end - start, steadinessCents }))
@@ -74,6 +79,14 @@ export function holdNow(frames: readonly LiveFrame[]): { midi: number; heldS: nu
   }
   return { midi: centre, heldS: held / 100 };
 }
+
+/** Whether somebody sang and then fell silent: the try is over before its time. */
+export function fellSilent(frames: readonly LiveFrame[]): boolean {
+  const silent = frames.slice(-silentFrames).every(({ hz }) => hz === null);
+  return silent && frames.filter(({ hz }) => hz !== null).length >= soundedFrames;
+}
+
+const silentFrames = 120;
 
 /** A note counts from here on, in seconds. */
 export const leastHoldS = HELD_IN_HOLD_S;

@@ -5,7 +5,11 @@ import type { FromGuidedWorker } from "./guidedProtocol";
 function open(judge = (pcm: Float32Array) => ({ durationS: pcm.length }) as unknown as TakeReport) {
   const told: FromGuidedWorker[] = [];
   const port = { onmessage: null as ((event: { data: unknown }) => void) | null, close: jest.fn() };
-  const tell = createGuidedListener({ createTracker: () => ({ push: () => [] }), judge, post: (m) => void told.push(m) });
+  const tell = createGuidedListener({
+    createTracker: () => ({ push: () => [] }),
+    judge,
+    post: (m) => void told.push(m),
+  });
   const begin = () => tell({ kind: "begin", sampleRate: 1000, sound: port as unknown as MessagePort });
   const block = (pcm: Float32Array) => port.onmessage?.({ data: { kind: "block", pcm } });
   return { told, port, tell, begin, block };

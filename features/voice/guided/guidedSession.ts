@@ -1,4 +1,4 @@
-import { enoughHoldS, holdNow, longestTryS, readTry, type Asked } from "./guidedHold";
+import { enoughHoldS, fellSilent, holdNow, longestTryS, readTry, type Asked } from "./guidedHold";
 import type { FromGuidedWorker, ToGuidedWorker } from "./guidedProtocol";
 import type { GuidedEvent } from "./guidedSteps";
 import { openGuidedWorker } from "./openGuidedWorker";
@@ -40,7 +40,8 @@ export function createGuidedSession(emit: (event: GuidedEvent) => void, live: Li
     else if (message.kind === "judged") emit({ kind: "judged", outcome: readTry(message.report, asked) });
     else if (listening) {
       hear(live, { ...message, ahead: [] }, performance.now());
-      if ((holdNow(live.frames)?.heldS ?? 0) >= enoughHoldS || live.seconds >= longestTryS) {
+      const held = holdNow(live.frames)?.heldS ?? 0;
+      if (held >= enoughHoldS || live.seconds >= longestTryS || fellSilent(live.frames)) {
         endListening();
         emit({ kind: "listened" });
       }

@@ -27,7 +27,10 @@ function walk(state: GuidedState, low: number, high: number): { state: GuidedSta
     else if (step === "judging") {
       const target = runOf(state).target ?? 57;
       asked.push(target);
-      state = guidedSteps(state, { kind: "judged", outcome: target >= low && target <= high ? held(target) : unsteady });
+      state = guidedSteps(state, {
+        kind: "judged",
+        outcome: target >= low && target <= high ? held(target) : unsteady,
+      });
     } else if (step === "held") state = guidedSteps(state, { kind: "next" });
     else if (step === "missed") state = guidedSteps(state, { kind: "again" });
     else return { state, asked };
@@ -75,7 +78,19 @@ test("without a known voice the singer hums a comfortable note first, and both w
 });
 
 test("who sings a neighbour of the note asked for goes on from what was really sung", () => {
-  const far = after([{ kind: "toneEnded" }, { kind: "listened" }, { kind: "judged", outcome: held(57) }, { kind: "next" }, { kind: "toneEnded" }, { kind: "listened" }, { kind: "judged", outcome: held(54.1) }, { kind: "next" }], begun());
+  const far = after(
+    [
+      { kind: "toneEnded" },
+      { kind: "listened" },
+      { kind: "judged", outcome: held(57) },
+      { kind: "next" },
+      { kind: "toneEnded" },
+      { kind: "listened" },
+      { kind: "judged", outcome: held(54.1) },
+      { kind: "next" },
+    ],
+    begun(),
+  );
   expect(runOf(far).target).toBe(52);
 });
 
@@ -86,7 +101,18 @@ test("a try in which nothing could be heard is no try of the voice", () => {
 });
 
 test("enough at any moment keeps what was held, and finishing leaves the other end unsaid", () => {
-  const down = after([{ kind: "toneEnded" }, { kind: "listened" }, { kind: "judged", outcome: held(57) }, { kind: "next" }, { kind: "toneEnded" }, { kind: "listened" }, { kind: "judged", outcome: held(55) }], begun());
+  const down = after(
+    [
+      { kind: "toneEnded" },
+      { kind: "listened" },
+      { kind: "judged", outcome: held(57) },
+      { kind: "next" },
+      { kind: "toneEnded" },
+      { kind: "listened" },
+      { kind: "judged", outcome: held(55) },
+    ],
+    begun(),
+  );
   const turned = guidedSteps(down, { kind: "enough" });
   expect(turned.step).toBe("turn");
   const done = guidedSteps(turned, { kind: "finish" });
@@ -97,8 +123,14 @@ test("enough at any moment keeps what was held, and finishing leaves the other e
 
 test("a microphone that is taken away keeps what was held, and says so where nothing was", () => {
   const one = after([{ kind: "toneEnded" }, { kind: "listened" }, { kind: "judged", outcome: held(57) }], begun());
-  const two = after([{ kind: "next" }, { kind: "toneEnded" }, { kind: "listened" }, { kind: "judged", outcome: held(55) }], one);
-  expect(guidedSteps(two, { kind: "interrupted", cause: "unplugged" })).toMatchObject({ step: "done", brokenOff: "unplugged" });
+  const two = after(
+    [{ kind: "next" }, { kind: "toneEnded" }, { kind: "listened" }, { kind: "judged", outcome: held(55) }],
+    one,
+  );
+  expect(guidedSteps(two, { kind: "interrupted", cause: "unplugged" })).toMatchObject({
+    step: "done",
+    brokenOff: "unplugged",
+  });
   expect(guidedSteps(one, { kind: "interrupted", cause: "unplugged" })).toEqual({ step: "failed", why: "unplugged" });
   expect(guidedSteps(one, { kind: "finish" })).toEqual({ step: "failed", why: "nothing" });
   expect(guidedSteps(begun(), { kind: "interrupted", cause: "taken" })).toEqual({ step: "failed", why: "taken" });
@@ -114,7 +146,13 @@ test("the ways end where notes can no longer be heard surely", () => {
 test("notes for a song stay among the held ones and in order, whatever is asked for", () => {
   const turned = walk(begun(), 50, 70).state;
   const done = walk(guidedSteps(turned, { kind: "up" }), 50, 70).state;
-  const wild = after([{ kind: "found", change: { singHigh: 99 } }, { kind: "found", change: { singLow: 80 } }], done);
+  const wild = after(
+    [
+      { kind: "found", change: { singHigh: 99 } },
+      { kind: "found", change: { singLow: 80 } },
+    ],
+    done,
+  );
   expect(wild).toMatchObject({ findings: { singLow: 70, singHigh: 70 } });
 });
 

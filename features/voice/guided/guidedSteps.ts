@@ -121,7 +121,9 @@ function atStep(state: Running, event: GuidedEvent): GuidedState {
     case "missed":
       return event.kind === "again" ? ask(retry(run)) : state;
     case "turn":
-      return event.kind === "up" ? ask({ ...run, end: "high", target: stepFrom(run, "high"), stride: 2, tries: 0 }) : state;
+      return event.kind === "up"
+        ? ask({ ...run, end: "high", target: stepFrom(run, "high"), stride: 2, tries: 0 })
+        : state;
   }
 }
 

@@ -17,7 +17,10 @@ export function stepWords(state: Exclude<GuidedState, { step: "before" | "done" 
   const asked = run.target === null ? null : noteWord(run.target);
   switch (state.step) {
     case "opening":
-      return { title: "Waiting for the microphone", text: "Your browser asks whether this page may use it. Choose to allow it." };
+      return {
+        title: "Waiting for the microphone",
+        text: "Your browser asks whether this page may use it. Choose to allow it.",
+      };
     case "tone":
       return { title: "Listen", text: `This is ${asked}.` };
     case "listening":
@@ -42,7 +45,8 @@ function missedWords(run: GuidedRun, outcome: Exclude<TryOutcome, { kind: "held"
   const onward = againIsSmaller(run)
     ? `You can try half the step, or leave it at that.`
     : "You can try it once more, or leave it at that.";
-  if (outcome.kind === "unsteady") return { title: `${asked} did not stay`, text: `That happens near the end of a voice. ${onward}` };
+  if (outcome.kind === "unsteady")
+    return { title: `${asked} did not stay`, text: `That happens near the end of a voice. ${onward}` };
   return { title: `That was ${noteWord(outcome.note.midi)}`, text: `${asked} was asked for. ${onward}` };
 }
 
@@ -66,11 +70,16 @@ export function enoughWords(end: GuidedEnd): string {
 /** "Lowest held so far: F2." */
 export function soFarWords(run: GuidedRun): string {
   const edge = farthest(run, run.end);
-  if (!edge) return run.home === null ? "" : `We start at ${noteWord(run.home)}, in the middle of your comfortable notes.`;
+  if (!edge)
+    return run.home === null ? "" : `We start at ${noteWord(run.home)}, in the middle of your comfortable notes.`;
   return `${run.end === "low" ? "Lowest" : "Highest"} held so far: ${noteWord(edge.midi)}, ${edge.heldS.toFixed(1)} s.`;
 }
 
-export function failedWords(why: (GuidedState & { step: "failed" })["why"]): { title: string; happened: string; next: string } {
+export function failedWords(why: (GuidedState & { step: "failed" })["why"]): {
+  title: string;
+  happened: string;
+  next: string;
+} {
   if (why === "nothing") {
     return {
       title: "Only one note so far",

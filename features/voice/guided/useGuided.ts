@@ -1,6 +1,14 @@
 import { useEffect, useReducer, useRef, useState, type Dispatch } from "react";
 import { createGuidedSession, type GuidedSession } from "./guidedSession";
-import { beforeGuided, farthest, guidedSteps, sideOf, type GuidedEvent, type GuidedRun, type GuidedState } from "./guidedSteps";
+import {
+  beforeGuided,
+  farthest,
+  guidedSteps,
+  sideOf,
+  type GuidedEvent,
+  type GuidedRun,
+  type GuidedState,
+} from "./guidedSteps";
 import { createLiveSound, type LiveSound } from "../recorder/liveSound";
 
 /** Long enough to read "held" and to breathe in. */

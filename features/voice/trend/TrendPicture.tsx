@@ -138,14 +138,23 @@ function TakeColumn({
 }
 
 /** Shape: time of day. Filled: warmed up; open: not; open and broken: not said. */
-function DayMark({ point: { dayTime, warmedUp }, x, y }: { point: Pick<TrendPoint, "dayTime" | "warmedUp">; x: number; y: number }) {
+function DayMark({
+  point: { dayTime, warmedUp },
+  x,
+  y,
+}: {
+  point: Pick<TrendPoint, "dayTime" | "warmedUp">;
+  x: number;
+  y: number;
+}) {
   const look = {
     fill: warmedUp ? colors.ink : "none",
     stroke: colors.ink,
     strokeWidth: 1.75,
     ...(warmedUp === null ? { strokeDasharray: "2.5 2.5" } : null),
   };
-  if (dayTime === "morning") return <Path d={`M${x} ${y - 7}L${x + 7} ${y + 5}H${x - 7}Z`} strokeLinejoin="round" {...look} />;
+  if (dayTime === "morning")
+    return <Path d={`M${x} ${y - 7}L${x + 7} ${y + 5}H${x - 7}Z`} strokeLinejoin="round" {...look} />;
   if (dayTime === "afternoon") return <Rect x={x - 6} y={y - 6} width={12} height={12} rx={1.5} {...look} />;
   return <Circle cx={x} cy={y} r={6.5} {...look} />;
 }
@@ -180,7 +189,10 @@ function Legend() {
   return (
     <View style={{ flexDirection: "row", flexWrap: "wrap", columnGap: 16, rowGap: 4 }}>
       {item("comfort", <Rect x={4} y={2} width={10} height={14} rx={4} fill={colors.lagoon} />)}
-      {item("range", <Rect x={4} y={2} width={10} height={14} rx={4} fill="none" stroke={colors.honey} strokeWidth={2} />)}
+      {item(
+        "range",
+        <Rect x={4} y={2} width={10} height={14} rx={4} fill="none" stroke={colors.honey} strokeWidth={2} />,
+      )}
       {item("guided hold", <Line x1={2} x2={16} y1={9} y2={9} stroke={colors.ink} strokeWidth={2.5} />)}
       {item("morning", shape("morning", false))}
       {item("afternoon", shape("afternoon", false))}

@@ -44,6 +44,10 @@ export function TrendTable({ points }: TrendTableProps) {
 
 function cellsOf({ at, dayTime, range, comfort, warmedUp, effort, held }: TrendPoint): string[] {
   const date = new Intl.DateTimeFormat("en-GB", { day: "numeric", month: "short", year: "numeric" }).format(at);
-  const how = [held ? "guided hold" : "phrase", warmedWords(warmedUp), effort && `${effort} of 5, ${effortWords[effort - 1]}`];
+  const how = [
+    held ? "guided hold" : "phrase",
+    warmedWords(warmedUp),
+    effort && `${effort} of 5, ${effortWords[effort - 1]}`,
+  ];
   return [`${date}, ${dayTime}`, bandWords(range), bandWords(comfort), how.filter(Boolean).join(", ")];
 }

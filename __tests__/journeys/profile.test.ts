@@ -1,0 +1,116 @@
+import { readFileSync } from "node:fs";
+import type { Browser, Page } from "playwright-core";
+import { launchBrowser, openProfile, type Viewport } from "./browser";
+import { startProduct, type Product } from "./product";
+
+const axe = readFileSync(require.resolve("axe-core/axe.min.js"), "utf8");
+let product: Product;
+let browser: Browser;
+
+beforeAll(async () => {
+  product = await startProduct();
+  browser = await launchBrowser("none");
+}, 60_000);
+afterAll(async () => {
+  await browser.close();
+  await product.stop();
+});
+
+/** Maren of the demonstration: two phrases and a guided hold. */
+async function openVoice(viewport: Viewport, scheme: "light" | "dark" = "light") {
+  const profile = await openProfile(browser, product.address, viewport, scheme);
+  const { page } = profile;
+  await page.goto("/account/sign-in?next=/voice");
+  await page.getByTestId("email").fill("maren@orlow-quay.example");
+  await page.getByTestId("password").fill("slipway lantern");
+  await page.getByTestId("send").click();
+  await page.getByTestId("voice-range").waitFor();
+  return profile;
+}
+
+const said = (page: Page) =>
+  Promise.all([page.getByTestId("voice-range").textContent(), page.getByTestId("comfort-notes").textContent()]);
+
+test("rating a take changes the comfortable notes, and taking the rating back restores them exactly", async () => {
+  const { page, context } = await openVoice("phone");
+  const row = page.getByTestId("take-row").nth(1);
+  await row.getByTestId("take-felt").click();
+  const before = await said(page);
+  await row.getByRole("radio", { name: "5", exact: true }).click();
+  await row.getByText(/felt 5 of 5, straining/).waitFor();
+  await page.waitForFunction(
+    (words) => document.querySelector('[data-testid="comfort-notes"]')?.textContent !== words,
+    before[1],
+  );
+  await row.getByRole("radio", { name: "2", exact: true }).click();
+  await row.getByText(/felt 2 of 5/).waitFor();
+  await page.waitForFunction(
+    (words) => document.querySelector('[data-testid="comfort-notes"]')?.textContent === words,
+    before[1],
+  );
+  await page.reload();
+  await page.getByTestId("voice-range").waitFor();
+  expect(await said(page)).toEqual(before);
+  await context.close();
+}, 60_000);
+
+test("the notes answer why they are what they are, and the picture over time stands as a table too", async () => {
+  const { page, errors, context } = await openVoice("wide");
+  await page.getByTestId("why-high").click();
+  expect(await page.getByTestId("why-high-answer").textContent()).toMatch(
+    /^You held C5 for 1\.0 s in the guided hold of Saturday,? 28 November, \d\d:\d\d\./,
+  );
+  await page.getByRole("img", { name: /^3 takes from 12 Nov to 28 Nov\./ }).waitFor();
+  await page.getByTestId("trend-as-table").click();
+  const table = page.getByRole("table", { name: "Takes over time" });
+  expect(await table.getByRole("row").count()).toBe(4);
+  expect(await table.textContent()).toContain("guided hold, warmed up, 3 of 5, some work");
+  expect(errors).toEqual([]);
+  await context.close();
+}, 60_000);
+
+test.each([
+  ["phone", "light"],
+  ["phone", "dark"],
+  ["wide", "light"],
+  ["wide", "dark"],
+] as const)(
+  "the profile with everything open is accessible on the %s in %s colours",
+  async (viewport, scheme) => {
+    const { page, context } = await openVoice(viewport, scheme);
+    await page.getByTestId("why-comfort").click();
+    await page.getByTestId("trend-as-table").click();
+    await page.getByTestId("take-felt").first().click();
+    await page.getByTestId("take-erase").nth(1).click();
+    await page.evaluate(axe);
+    const findings = await page.evaluate(
+      "axe.run({ resultTypes: ['violations'] }).then((r) => r.violations.map(({ id, nodes }) => id + ': ' + nodes.map(({ target }) => target.join(' ')).join(', ')))",
+    );
+    expect(findings).toEqual([]);
+    await page.goto("/voice/guided");
+    await page.getByTestId("guided-start").waitFor();
+    await page.evaluate(axe);
+    expect(
+      await page.evaluate("axe.run({ resultTypes: ['violations'] }).then((r) => r.violations.map(({ id }) => id))"),
+    ).toEqual([]);
+    expect(await page.evaluate("document.documentElement.scrollWidth > document.documentElement.clientWidth")).toBe(
+      false,
+    );
+    await context.close();
+  },
+  60_000,
+);
+
+test("erasing a take asks first and says what will be left, and exactly that is left", async () => {
+  const { page, context } = await openVoice("phone");
+  const row = page.getByTestId("take-row").first();
+  await row.getByTestId("take-erase").click();
+  const promised = /Without it you can hold (.*), comfortably (.*)\. This/.exec((await row.textContent()) ?? "");
+  expect(promised).not.toBeNull();
+  await page.getByTestId("take-erase-confirm").click();
+  await page.waitForFunction(() => document.querySelectorAll('[data-testid="take-row"]').length === 2);
+  const [range, comfort] = await said(page);
+  expect(range).toBe(`You can hold: ${promised?.[1]}.`);
+  expect(comfort).toContain(promised?.[2]);
+  await context.close();
+}, 60_000);

@@ -1,4 +1,6 @@
 import { useQuery } from "@tanstack/react-query";
+import { useLocalSearchParams } from "expo-router";
+import { EnteredNotice } from "@/features/account/EnteredNotice";
 import { decidedOn } from "@/features/keys/decide";
 import { decisionFor, decisionQueries } from "@/features/keys/decisionQueries";
 import { ShelfStrip } from "@/features/keys/ShelfStrip";
@@ -17,6 +19,7 @@ import { moveWords } from "@/shared/music/moveWords";
 import { glyphs } from "@/shared/music/pitch";
 
 export default function SongsRoute() {
+  const { entered } = useLocalSearchParams<{ entered?: string }>();
   const songs = useQuery(songQueries.all());
   const decisions = useQuery(decisionQueries.all());
   const { singing } = useSingingVoice();
@@ -40,6 +43,7 @@ export default function SongsRoute() {
         )
       }
     >
+      <EnteredNotice entered={entered} />
       <SignedOutNotice />
       <QueryState
         query={songs}

@@ -1,4 +1,4 @@
-import { useEffect, useState, type ReactNode } from "react";
+import { useEffect, useRef, useState, type ReactNode } from "react";
 import { Controller, useForm } from "react-hook-form";
 import { View } from "react-native";
 import { ApiError } from "@/features/api/apiError";
@@ -35,12 +35,12 @@ export function CredentialsForm(props: CredentialsFormProps) {
   const form = useForm<SignInRequest>({ defaultValues: { email: "", password: "" }, shouldFocusError: false });
   const { errors, submitCount } = form.formState;
 
-  // The first field that needs mending takes the focus, once for each attempt.
-  const attempt = `${submitCount} ${refusal?.code ?? ""}`;
+  // The first field that needs mending takes the focus, or else what was said; once for each attempt.
+  const problem = useRef<HTMLDivElement>(null);
   useEffect(() => {
     const wrong = document.querySelector<HTMLElement>("form [aria-invalid=true]");
-    if (submitCount > 0) wrong?.focus();
-  }, [attempt, submitCount]);
+    if (submitCount > 0) (wrong ?? problem.current)?.focus();
+  }, [refusal, submitCount]);
 
   async function send(credentials: SignInRequest) {
     setRefusal(null);
@@ -58,7 +58,7 @@ export function CredentialsForm(props: CredentialsFormProps) {
   const moving = entering && progress.status === "moving";
   const busyLabel = moving ? `Moving your things: ${progress.moved} of ${progress.total}` : props.busyLabel;
   return (
-    <Form label={props.label} onSubmit={() => void form.handleSubmit(send)()}>
+    <Form label={props.label} onSubmit={() => void (entering || form.handleSubmit(send)())}>
       <Controller
         control={form.control}
         name="email"
@@ -107,9 +107,11 @@ export function CredentialsForm(props: CredentialsFormProps) {
       </View>
       {props.children}
       {refusal && (
-        <Notice kind={noticeKind(refusal.code)} testID="form-problem">
-          {refusal.code === "offline" ? `${refusal.message} What you typed is still here.` : refusal.message}
-        </Notice>
+        <div ref={problem} tabIndex={-1}>
+          <Notice kind={noticeKind(refusal.code)} testID="form-problem">
+            {refusal.code === "offline" ? `${refusal.message} What you typed is still here.` : refusal.message}
+          </Notice>
+        </div>
       )}
       <Button
         submit

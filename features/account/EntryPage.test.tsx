@@ -6,6 +6,7 @@ import { kept } from "@/__tests__/client/memoryIdb";
 import { queryClient } from "@/features/api/queryClient";
 import { session } from "@/features/api/session";
 import { shelf } from "@/features/api/shelf";
+import { EnteredNotice } from "./EnteredNotice";
 import { EntryPage } from "./EntryPage";
 import type { EntryKind } from "./useEntry";
 
@@ -69,10 +70,24 @@ it("goes to the account, where it is told, when something could not move", async
   expect((await screen.findByTestId("redirect")).textContent).toBe("/account");
 });
 
+it("leads to the songs, which say that one is in, where nobody said where to go", async () => {
+  open("sign-up");
+  fillAndSend("Sign up");
+  expect((await screen.findByTestId("redirect")).textContent).toBe("/songs?entered=yes");
+  const line = "You are signed in; what you did here is in your account.";
+  const { rerender } = render(<EnteredNotice entered="yes" />);
+  expect(screen.getByTestId("entered").textContent).toBe(line);
+  rerender(<EnteredNotice entered={undefined} />);
+  expect(screen.queryByTestId("entered")).toBeNull();
+  rerender(<EnteredNotice entered="yes" />);
+  await act(() => session.signOut());
+  expect(screen.queryByTestId("entered")).toBeNull();
+});
+
 it("does not follow an address of another site", async () => {
   open("sign-up", "//elsewhere.example/songs");
   fillAndSend("Sign up");
-  expect((await screen.findByTestId("redirect")).textContent).toBe("/");
+  expect((await screen.findByTestId("redirect")).textContent).toBe("/songs?entered=yes");
 });
 
 it("says beside the field that a password is too short, sends nothing and keeps what was typed", async () => {
@@ -107,7 +122,10 @@ it("says that address and password do not belong together, and keeps both", asyn
   api.addPerson(email, password);
   open("sign-in");
   fillAndSend("Sign in", { email, password: "not the one" });
-  expect((await screen.findByRole("alert")).textContent).toMatch(/do not belong together/);
+  const said = await screen.findByRole("alert");
+  expect(said.textContent).toMatch(/do not belong together/);
+  await waitFor(() => expect(document.activeElement?.contains(said)).toBe(true));
+  expect(document.activeElement).not.toBe(document.body);
   expect([value("E-mail address"), value("Password")]).toEqual([email, "not the one"]);
   expect(api.count("POST /auth/refresh")).toBe(0);
 });
@@ -135,6 +153,23 @@ it("is a form that password keepers understand", () => {
   unmount();
   open("sign-in");
   expect(screen.getByLabelText("Password").getAttribute("autocomplete")).toBe("current-password");
+});
+
+it("keeps the focus on the button while it is sent, and sends once however often it is pressed", async () => {
+  api.addPerson(email, password);
+  let answer: () => void = () => undefined;
+  const held = new Promise<void>((resolve) => (answer = resolve));
+  const send = globalThis.fetch;
+  globalThis.fetch = (async (...asked: Parameters<typeof fetch>) => (await held, send(...asked))) as typeof fetch;
+  open("sign-in");
+  act(() => screen.getByTestId("send").focus());
+  fillAndSend("Sign in");
+  await waitFor(() => expect(screen.getByTestId("send").getAttribute("aria-disabled")).toBe("true"));
+  expect(document.activeElement).toBe(screen.getByTestId("send"));
+  fireEvent.click(screen.getByTestId("send"));
+  answer();
+  expect(await screen.findByTestId("redirect")).toBeTruthy();
+  expect(api.count("POST /auth/sign-in")).toBe(1);
 });
 
 it("carries the way back over to the other form", () => {

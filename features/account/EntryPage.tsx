@@ -17,7 +17,7 @@ interface EntryPageProps {
   next: string | string[] | undefined;
 }
 
-/** Signing up or in; afterwards back to where the person came from. */
+/** Signing up or in; afterwards back to where the person came from, or to the songs. */
 export function EntryPage({ kind, next }: EntryPageProps) {
   const session = useSession();
   const entry = useEntry(kind);
@@ -26,7 +26,9 @@ export function EntryPage({ kind, next }: EntryPageProps) {
   const query = target === "/" ? "" : `?next=${encodeURIComponent(target)}`;
   if (session.status === "signed-in" && !entry.entering) {
     const settled = entry.progress.stayed.length === 0 && entry.progress.status !== "stopped";
-    return <Redirect href={(settled ? target : "/account") as Href} />;
+    // The first page is for those who are not in yet.
+    const inside = target === "/" ? "/songs?entered=yes" : target;
+    return <Redirect href={(settled ? inside : "/account") as Href} />;
   }
   const up = kind === "sign-up";
   const form = up ? <SignUpForm entry={entry} /> : <SignInForm entry={entry} />;

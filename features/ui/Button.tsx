@@ -1,3 +1,4 @@
+import { useEffect, useRef } from "react";
 import { Pressable, type StyleProp, type View, type ViewStyle } from "react-native";
 import { ButtonFace, buttonBox, type ButtonLook } from "./ButtonFace";
 import { useLayout } from "./useLayout";
@@ -15,18 +16,23 @@ export interface ButtonProps extends ButtonLook {
   style?: StyleProp<ViewStyle>;
 }
 
-// The web renderer makes every button a plain one and drops `type`.
-const asSubmit = (node: View | null) => void (node as unknown as HTMLElement | null)?.setAttribute("type", "submit");
-
 export function Button({ onPress, accessibleName, submit, expanded, testID, style, ...look }: ButtonProps) {
   const layout = useLayout();
-  const off = look.disabled === true || look.busy === true;
+  const node = useRef<View>(null);
+  const busy = look.busy === true;
+  useEffect(() => {
+    // The web renderer drops `type`, and would take the focus from a button that it is told is off.
+    const button = node.current as unknown as HTMLElement | null;
+    if (submit) button?.setAttribute("type", busy ? "button" : "submit");
+    if (busy) button?.setAttribute("aria-disabled", "true");
+    return () => button?.removeAttribute("aria-disabled");
+  }, [submit, busy]);
   return (
     <Pressable
-      {...(submit ? { ref: asSubmit } : null)}
+      ref={node}
       role="button"
-      onPress={onPress}
-      disabled={off}
+      onPress={busy ? null : onPress}
+      disabled={look.disabled === true}
       testID={testID}
       aria-label={accessibleName}
       {...webProps({ "aria-busy": look.busy || undefined, "aria-expanded": expanded })}

@@ -62,6 +62,21 @@ describe("the shell", () => {
     expect(window.scrollTo).toHaveBeenCalledWith(0, 0);
   });
 
+  it("moves the focus on to the heading of the page that takes the place of its skeleton", () => {
+    const { rerender } = render(page("Songs"));
+    mockPathname = "/songs/7";
+    rerender(page("Song"));
+    rerender(page("Slack Water"));
+    expect(document.activeElement).toBe(screen.getByRole("heading", { name: "Slack Water" }));
+    expect(screen.getByRole("status").textContent).toBe("Slack Water");
+  });
+
+  it("leaves the focus alone where the first page takes the place of its skeleton", () => {
+    const { rerender } = render(page("Song"));
+    rerender(page("Slack Water"));
+    expect(document.activeElement).toBe(document.body);
+  });
+
   it("does not move the focus when a page only changes its title", () => {
     const { rerender } = render(page("Songs"));
     rerender(page("Songs, searched"));

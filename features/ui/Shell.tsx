@@ -22,13 +22,21 @@ export function Shell({ initial = null, children }: ShellProps) {
   const [barHidden, setBarHidden] = useState(false);
   const [said, setSaid] = useState("");
   const lastPath = useRef<string | null>(null);
+  /** this page was come to from another one */
+  const visited = useRef(false);
 
   const arrive = useCallback(
     (title: string, heading: HTMLElement | null) => {
       const cameFrom = lastPath.current;
       lastPath.current = pathname;
-      if (cameFrom === null || cameFrom === pathname) return;
-      window.scrollTo(0, 0);
+      if (cameFrom === pathname) {
+        // The page stands where its grey bars stood, and the heading that had the focus went with them.
+        if (!visited.current || document.activeElement !== document.body) return;
+      } else {
+        visited.current = cameFrom !== null;
+        if (!visited.current) return;
+        window.scrollTo(0, 0);
+      }
       heading?.focus({ preventScroll: true });
       setSaid(title);
     },

@@ -57,10 +57,21 @@ export function makeMicrophones() {
       padded.set(rendered.pcm);
       return { wav: keep("choir", padded, rendered.sampleRate), lowestMidi, highestMidi: lowestMidi + 14 };
     },
+    /**
+     * Any mono sound; given the first and last second that the fake microphone needs, unless it fills the room. The fake
+     * microphone runs at 44.1 kHz: what must arrive unchanged, such as cut-off peaks, comes at that rate.
+     */
+    sound(name: string, pcm: Float32Array, sampleRate: number, padded = true) {
+      const around = padded ? padS * sampleRate : 0;
+      const whole = new Float32Array(pcm.length + 2 * around);
+      whole.set(pcm, around);
+      return keep(name, whole, sampleRate);
+    },
     /** Ten seconds of a switched-off room. */
     silence() {
       return keep("silence", new Float32Array(10 * 48_000), 48_000);
     },
+    folder,
     remove: () => rmSync(folder, { recursive: true, force: true }),
   };
 }

@@ -21,6 +21,9 @@ export interface VoiceEdges {
   rangeHigh: number;
   comfortLow: number;
   comfortHigh: number;
+  /** the ends of what was sung so far; those of the range where they were measured or given */
+  heardLow: number;
+  heardHigh: number;
 }
 
 /**
@@ -36,11 +39,16 @@ export function voiceEdges(voice: SingingVoice): VoiceEdges {
   const edges = [range.lowMidi, comfort.lowMidi, comfort.highMidi, range.highMidi];
   const inOrder = edges.every((edge, k) => Number.isFinite(edge) && (k === 0 || edges[k - 1]! <= edge));
   if (!inOrder) throw new RangeError("a voice needs a comfort band inside its range, both from low to high");
+  const rangeLow = Math.round(range.lowMidi);
+  const rangeHigh = Math.round(range.highMidi);
+  const heard = voice.heard ?? range;
   return {
-    rangeLow: Math.round(range.lowMidi),
+    rangeLow,
     comfortLow: Math.round(comfort.lowMidi),
     comfortHigh: Math.round(comfort.highMidi),
-    rangeHigh: Math.round(range.highMidi),
+    rangeHigh,
+    heardLow: Math.max(rangeLow, Math.round(heard.lowMidi)),
+    heardHigh: Math.min(rangeHigh, Math.round(heard.highMidi)),
   };
 }
 
@@ -65,11 +73,10 @@ export function keyParts(pitches: readonly TunePitch[], edges: VoiceEdges): KeyP
     // At most two thirds, so that in points it stays below what the same distance above costs.
     lowCarry: (2 / 3) * capped(4.5 * total(pitches, ({ midi, share }) => share * ramp(edges.comfortLow + 3 - midi))),
   };
-  // Beyond the range every part shrinks by the time spent out there at least, and the room on that side is lost in full.
   const points = (part: keyof KeyParts) => {
     const base = sure[part];
     const earned = partMaxima[part] - base;
-    if (outside > 0) return base - whole(base * Math.max(losses[part], Math.min(1, outside)));
+    if (outside > 0) return base - whole(base * lossBeyond(part, losses[part], Math.min(1, outside)));
     return base + earned - whole(earned * losses[part]);
   };
   return {
@@ -79,6 +86,15 @@ export function keyParts(pitches: readonly TunePitch[], edges: VoiceEdges): KeyP
     longHigh: points("longHigh"),
     lowCarry: points("lowCarry"),
   };
+}
+
+/**
+ * Beyond the range every part shrinks by the time spent out there, so that the octave and the key that leave out least
+ * come first; the room on that side is lost in full, and what remains inside tells keys apart that leave out alike.
+ */
+function lossBeyond(part: keyof KeyParts, loss: number, outside: number): number {
+  if (part === "roomAbove" || part === "roomBelow") return Math.max(loss, outside);
+  return part === "comfort" ? outside + (1 - outside) * 0.25 * loss : outside;
 }
 
 /** How far from sitting well a pitch is: 0 in the band, 2 and growing above it, less below. */

@@ -2,6 +2,9 @@ import { glyphs, noteName, type Spelling } from "../music/pitch";
 import type { KeyMark, KeyParts } from "./keyScore";
 import { partMaxima, type VoiceEdges } from "./keyParts";
 
+/** Said of a key that was judged without knowing which notes of the span are sung how long. */
+export const COARSE_WORDS = "Judged by the span alone.";
+
 /** What the sentence about a key is made from. */
 export interface KeyFacts {
   marks: readonly KeyMark[];
@@ -23,14 +26,16 @@ const briefUpTo = 0.05;
  */
 export function keyReason(facts: KeyFacts, edges: VoiceEdges): string {
   const sentence = facts.beyond ? beyondSentence(facts, edges) : insideSentence(facts, edges);
-  return facts.coarse ? `${sentence} Judged by the span alone.` : sentence;
+  return facts.coarse ? `${sentence} ${COARSE_WORDS}` : sentence;
 }
 
 function beyondSentence({ marks, spelling, coarse }: KeyFacts, edges: VoiceEdges): string {
   const above = marks.filter(({ midi }) => midi > edges.rangeHigh);
   const below = marks.filter(({ midi }) => midi < edges.rangeLow);
-  const clause = (beyond: readonly KeyMark[], where: string) =>
-    `lies ${where} your range (${noteList(beyond, spelling)})`;
+  const clause = (beyond: readonly KeyMark[], where: "above" | "below") => {
+    const estimated = where === "above" ? edges.heardHigh < edges.rangeHigh : edges.heardLow > edges.rangeLow;
+    return `lies ${where} ${estimated ? "what you probably reach" : "your range"} (${noteList(beyond, spelling)})`;
+  };
   if (coarse) {
     const sides = [above.length > 0 ? clause(above, "above") : "", below.length > 0 ? clause(below, "below") : ""];
     return `Part of the tune ${sides.filter(Boolean).join(" and part ")}.`;
@@ -54,9 +59,18 @@ function insideSentence({ marks, parts, spelling, coarse }: KeyFacts, edges: Voi
   const furthest = up ? side[side.length - 1]! : side[0]!;
   const note = glyphs(noteName(furthest.midi, spelling));
   const distance = stepsInWords(up ? furthest.midi - edges.comfortHigh : edges.comfortLow - furthest.midi);
-  const last = furthest.midi === (up ? edges.rangeHigh : edges.rangeLow);
-  const lastWords = up ? `${note} is the highest note you have` : `${note} is the lowest note you have`;
   const place = up ? "over" : "under";
+  const unheard = side.filter(({ midi }) => midi > edges.heardHigh || midi < edges.heardLow);
+  if (unheard.length > 0) {
+    const what =
+      unheard.length === 1
+        ? `${note} is ${place} what you have sung so far`
+        : `${coarse ? "Part" : percent(shareOf(unheard))} of the tune lies ${place} what you have sung so far, ${up ? "up" : "down"} to ${note}`;
+    return `${what}; it is probably within reach (estimate).`;
+  }
+  const last = furthest.midi === (up ? edges.heardHigh : edges.heardLow);
+  const soFar = up ? edges.heardHigh < edges.rangeHigh : edges.heardLow > edges.rangeLow;
+  const lastWords = `${note} is the ${up ? "highest" : "lowest"} note you ${soFar ? "held so far" : "have"}`;
   if (side.length === 1) {
     const brief = !coarse && furthest.share <= briefUpTo ? ", briefly" : "";
     return last
@@ -74,13 +88,13 @@ function comfortSentence(parts: KeyParts, marks: readonly KeyMark[], edges: Voic
   if (most <= 2) return "All of it sits in your comfort band.";
   if (lost("roomAbove") === most) {
     const room = edges.rangeHigh - marks[marks.length - 1]!.midi;
-    return `All of it sits in your comfort band, with ${room === 0 ? "no room" : `only ${semitones(room)}`} above.`;
+    return `All of it sits in your comfort band, with ${room === 0 ? "no room" : `only ${semitones(room)}`} to the top of your range.`;
   }
   if (lost("longHigh") === most) return "All of it is comfortable; long notes lie at the top edge of your band.";
   if (lost("lowCarry") === most)
     return "All of it is comfortable; much of it lies at the bottom edge, where it carries less.";
   const room = marks[0]!.midi - edges.rangeLow;
-  return `All of it sits in your comfort band, with ${room === 0 ? "no room" : `only ${semitones(room)}`} below.`;
+  return `All of it sits in your comfort band, with ${room === 0 ? "no room" : `only ${semitones(room)}`} to the bottom of your range.`;
 }
 
 /**

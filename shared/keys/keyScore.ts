@@ -3,8 +3,14 @@ import type { MelodyNote } from "../songs/melody";
 
 /** A voice as the key scorer needs it: comfort lies inside range. Fractional MIDI numbers. */
 export interface SingingVoice {
+  /** the outer limit that keys are judged by */
   range: PitchBand;
   comfort: PitchBand;
+  /**
+   * What was sung so far, where that is less than the range because the range is partly an estimate: a phrase shows
+   * only part of a voice. Changes no score, only what is said. An end that equals the range's end was measured.
+   */
+  heard?: PitchBand;
 }
 
 /** What is known of the tune: its notes, or (coarser) only its span. */

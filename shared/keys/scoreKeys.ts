@@ -26,6 +26,11 @@ export interface KeyOptions {
 const hardFrom = 4;
 /** A voice may be written this many octaves away from where it sings. */
 const octavesAway = 5;
+/**
+ * C1 to C7: what people sing, with an octave to spare. A tune of more than two octaves and a half lies in no voice, so
+ * its octave is chosen within these; a narrower one stays there by itself.
+ */
+const singable = { low: 24, high: 96, widest: 30 };
 
 /**
  * Judges all twelve keys for one voice, each in the octave where it sits best.
@@ -89,8 +94,15 @@ function bestOctave(
     const score = parts.comfort + parts.roomAbove + parts.roomBelow + parts.longHigh + parts.lowCarry;
     return { octave, shift, moved, parts, score, reserves: reserves(moved, edges) };
   });
+  const tooWide = pitches[pitches.length - 1]!.midi - pitches[0]!.midi > singable.widest;
   // Below MIDI 0 notes have no names.
-  const best = choices.filter(({ moved }) => moved[0]!.midi >= 0).reduce((a, b) => (compareOctaves(a, b) <= 0 ? a : b));
+  const floor = tooWide ? singable.low : 0;
+  const outside = ({ moved }: { moved: readonly TunePitch[] }) =>
+    Math.max(0, floor - moved[0]!.midi) + (tooWide ? Math.max(0, moved[moved.length - 1]!.midi - singable.high) : 0);
+  const least = Math.min(...choices.map(outside));
+  const best = choices
+    .filter((choice) => outside(choice) === least)
+    .reduce((a, b) => (compareOctaves(a, b) <= 0 ? a : b));
   const { octave, shift, moved, parts, score } = best;
   const tonic = spellTonic(tonicPc, mode);
   const marks = moved.map(({ midi, share }): KeyMark => {

@@ -1,6 +1,6 @@
 import fc from "fast-check";
 import { tonicPitchClass } from "./keyName";
-import { keySign, keyWords, movedKey } from "./keyWords";
+import { keySign, keySignParts, keyWords, movedKey } from "./keyWords";
 
 test.each([
   [{ tonic: "D", mode: "major" }, "D major", "D"],
@@ -8,6 +8,18 @@ test.each([
   [{ tonic: "A", mode: "dorian" }, "A dorian", "A dorian"],
 ] as const)("%j in words", (key, words, sign) => {
   expect([keyWords(key), keySign(key)]).toEqual([words, sign]);
+});
+
+test.each([
+  [{ tonic: "D", mode: "major" }, "D", ""],
+  [{ tonic: "F#", mode: "minor" }, "F#m", ""],
+  [{ tonic: "D", mode: "dorian" }, "D", "dor."],
+  [{ tonic: "E", mode: "phrygian" }, "E", "phr."],
+  [{ tonic: "F", mode: "lydian" }, "F", "lyd."],
+  [{ tonic: "Eb", mode: "mixolydian" }, "Eb", "mixo."],
+  [{ tonic: "B", mode: "locrian" }, "B", "loc."],
+] as const)("%j large and small", (key, large, mode) => {
+  expect(keySignParts(key)).toEqual({ large, mode });
 });
 
 test("a key moved there and back has its tonic again", () => {

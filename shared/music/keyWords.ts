@@ -23,6 +23,28 @@ export function keySign(key: KeyName): string {
   return key.mode === "minor" ? `${key.tonic}m` : keyWords(key);
 }
 
+const shortModes: Record<KeyName["mode"], string> = {
+  major: "",
+  minor: "",
+  dorian: "dor.",
+  phrygian: "phr.",
+  lydian: "lyd.",
+  mixolydian: "mixo.",
+  locrian: "loc.",
+};
+
+/**
+ * A key's sign in two parts, for places that set the tonic large: modes other than major and minor get a short form.
+ *
+ * @param key tonic in ASCII, and mode
+ * @returns the large part, accidentals in ASCII, and the mode's short form; "" where the large part says it all
+ * @see common practice: short forms as chart writers put them
+ * @example keySignParts({ tonic: "Eb", mode: "mixolydian" }) // => { large: "Eb", mode: "mixo." }
+ */
+export function keySignParts(key: KeyName): { large: string; mode: string } {
+  return { large: key.mode === "minor" ? `${key.tonic}m` : key.tonic, mode: shortModes[key.mode] };
+}
+
 /**
  * The key some semitones away, in the same mode.
  *

@@ -5,6 +5,7 @@ import { Notice } from "@/features/ui/Notice";
 import { Screen } from "@/features/ui/Screen";
 import { Text } from "@/features/ui/Text";
 import { colors } from "@/features/ui/theme";
+import { webProps } from "@/features/ui/webStyle";
 import { useCountInSetting } from "./countInSetting";
 import { OtherWays } from "./OtherWays";
 
@@ -56,6 +57,14 @@ function CountInSwitch({ on, onChange }: { on: boolean; onChange: (on: boolean) 
       aria-checked={on}
       onPress={() => onChange(!on)}
       testID="count-in"
+      {...webProps({
+        // The web renderer lets Space press buttons only.
+        onKeyDown: (event: React.KeyboardEvent) => {
+          if (event.key !== " ") return;
+          event.preventDefault();
+          onChange(!on);
+        },
+      })}
       style={{ flexDirection: "row", alignItems: "center", gap: 12, minHeight: 48 }}
     >
       <View

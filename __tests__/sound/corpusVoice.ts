@@ -34,6 +34,8 @@ export interface VoiceBody {
   breathDb: number;
   jitter: number;
   shimmer: number;
+  /** how much weaker every second cycle is, 0 to 1: a rough voice, half way to an octave lower */
+  alternation?: number;
 }
 
 /**
@@ -72,7 +74,7 @@ export function soundLine(
     const nasal = note.onset === "nasal" && t < note.start + 0.08;
     moveFormants(formants, nasal ? NASAL : FORMANTS[note.vowel], body, hz);
     spectrum(strength, step, turn, turnStep, partials, most, hz, formants, body, block);
-    const rough = note.fry ? 0.6 : 0;
+    const rough = note.fry ? 0.6 : (body.alternation ?? 0);
     for (let i = from; i < min(length, from + block); i++) {
       const now = i / rate;
       const f = hzAt(curve, now);

@@ -53,6 +53,29 @@ const CONDITIONS: Record<string, Condition> = {
     sing: (_, body, random) =>
       Object.assign(body, { breathDb: random.between(-14, -8), tilt: random.between(1.5, 1.9), firstDb: 6 }),
   },
+  // Cycles alternate, but too little for the pitch to be heard an octave lower.
+  rough: {
+    voices: ["bass", "tenor", "alto"],
+    sing: (_, body, random) =>
+      Object.assign(body, {
+        alternation: random.between(0.08, 0.2),
+        jitter: random.between(0.008, 0.016),
+        shimmer: 0.08,
+      }),
+  },
+  belted: {
+    voices: ["baritone", "mezzo", "child"],
+    sing: (_, body, random) =>
+      Object.assign(body, { firstDb: random.between(-18, -9), tilt: random.between(0.5, 0.8) }),
+  },
+  awkward: {
+    voices: ["bass", "baritone", "alto", "child"],
+    sing: withVibrato,
+    place: (pcm, random) => {
+      const humming = rooms.addMains(pcm, rate, random.next() < 0.5 ? 50 : 60, random.between(-22, -14), random);
+      return rooms.laptopMicrophone(rooms.addNoise(humming, rate, random.between(12, 18), random), rate, random);
+    },
+  },
   reverb: {
     voices: ["bass", "tenor", "soprano"],
     place: (pcm, random) => rooms.hall(pcm, rate, random.between(0.6, 1.5), random.between(0.2, 0.45), random),

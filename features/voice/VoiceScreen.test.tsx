@@ -1,5 +1,5 @@
 import { QueryClient, QueryClientProvider } from "@tanstack/react-query";
-import { act, fireEvent, render, screen, waitFor, within } from "@testing-library/react";
+import { act, cleanup, fireEvent, render, screen, waitFor, within } from "@testing-library/react";
 import { aTake, aVoice } from "@/__tests__/client/belongings";
 import { FakeApi } from "@/__tests__/client/fakeApi";
 import { kept, refuseStorage } from "@/__tests__/client/memoryIdb";
@@ -103,4 +103,41 @@ it("adds, renames and switches voices, and deletes one with its takes after aski
   await press("voice-delete-confirm");
   await waitFor(() => expect(title()).toBe("Head voice"));
   expect(await shelf.list("takes")).toEqual([]);
+});
+
+it("says kindly that a voice moves, and names no kind of voice", async () => {
+  const voice = aVoice({ name: "My voice" });
+  await shelf.put("voices", voice);
+  const at = (sungAt: string, lowMidi: number, highMidi: number) => {
+    const band = { lowMidi, highMidi };
+    return aTake(voice.id, { sungAt, tuningCents: 0, range: band, comfort: band, estimate: band });
+  };
+  await shelf.put("takes", at("2026-09-01T10:00:00.000Z", 57, 77));
+  await shelf.put("takes", at("2026-09-05T10:00:00.000Z", 57, 77));
+  await shelf.put("takes", at("2026-10-20T10:00:00.000Z", 52, 71));
+  open();
+  await screen.findByTestId("voice-range");
+  expect(screen.queryByTestId("voice-moving")).toBeNull();
+  await act(async () => void (await shelf.put("takes", at("2026-10-24T10:00:00.000Z", 52, 71))));
+  cleanup();
+  open();
+  const words = (await screen.findByTestId("voice-moving")).textContent;
+  expect(words).toContain("In about 7 weeks your lowest note went down by 5 semitones.");
+  expect(words).not.toMatch(/soprano|alto|tenor|bass|doctor|!/i);
+});
+
+it("takes a rating, and back again exactly what was", async () => {
+  const voice = aVoice();
+  await shelf.put("voices", voice);
+  await shelf.put("takes", aTake(voice.id, { ...wide, tuningCents: 0, effort: null }));
+  open();
+  const comfort = () => screen.getByTestId("comfort-notes").textContent;
+  await screen.findByTestId("voice-range");
+  const before = comfort();
+  await press("take-felt");
+  await act(async () => fireEvent.click(screen.getByRole("radio", { name: "5" })));
+  await waitFor(() => expect(comfort()).not.toBe(before));
+  await act(async () => fireEvent.click(await screen.findByTestId("take-unrate")));
+  await waitFor(() => expect(comfort()).toBe(before));
+  expect((await shelf.list("takes"))[0]?.effort).toBeNull();
 });

@@ -101,6 +101,11 @@ test("a guided hold decides an end against a phrase that went a little farther",
   expect(highFrom).toBe("h");
 });
 
+test("an end that was looked for under guidance is no longer estimated, the other one is", () => {
+  const { range, estimate } = voiceOfTakes([take("a", 45, 66), take("h", 43, 57, { hold: true, shows: "low" })])!;
+  expect(estimate).toEqual({ lowMidi: range.lowMidi, highMidi: 68 });
+});
+
 test("no takes make no voice", () => {
   expect(voiceOfTakes([])).toBeNull();
 });

@@ -36,12 +36,16 @@ export function voiceOfTakes(takes: readonly ShownTake[]): VoiceProfile | null {
   const range = fits ? { lowMidi: low.range.lowMidi, highMidi: high.range.highMidi } : whole.range;
   const newest = Math.max(...takes.map(({ sungAt }) => Date.parse(sungAt)));
   const mean = (list: readonly ShownTake[], of: (take: ShownTake) => number) => weighedMean(list, newest, of);
+  // Where the end itself was looked for, nothing is left to estimate.
+  const held = (id: string) => takes.some((take) => take.id === id && take.hold === true);
   return {
     range,
     comfort: inside(range, { lowMidi: mean(forLow, easyLow), highMidi: mean(forHigh, easyHigh) }),
     estimate: {
-      lowMidi: Math.min(range.lowMidi, mean(forLow, (take) => take.estimate.lowMidi)),
-      highMidi: Math.max(range.highMidi, mean(forHigh, (take) => take.estimate.highMidi)),
+      lowMidi: held(low.lowFrom) ? range.lowMidi : Math.min(range.lowMidi, mean(forLow, (take) => take.estimate.lowMidi)),
+      highMidi: held(high.highFrom)
+        ? range.highMidi
+        : Math.max(range.highMidi, mean(forHigh, (take) => take.estimate.highMidi)),
     },
     certainty: whole.certainty,
     lowFrom: fits ? low.lowFrom : whole.lowFrom,

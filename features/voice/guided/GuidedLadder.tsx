@@ -72,6 +72,17 @@ export function GuidedLadder({ run, live, listening, height }: GuidedLadderProps
           {run.home !== null && own.length > 0 && (
             <Circle cx={columnX + columnWidth / 2} cy={y(run.home)} r={4} fill={colors.card} />
           )}
+          {sung >= low && sung <= high && (
+            <Line
+              x1={columnX - 10}
+              x2={width}
+              y1={y(sung)}
+              y2={y(sung)}
+              stroke={colors.ink}
+              strokeWidth={1.5}
+              strokeDasharray="2 5"
+            />
+          )}
           {run.target !== null && (
             <G>
               <Rect
@@ -98,15 +109,6 @@ export function GuidedLadder({ run, live, listening, height }: GuidedLadderProps
           )}
           {sung >= low && sung <= high && (
             <G>
-              <Line
-                x1={columnX - 10}
-                x2={width}
-                y1={y(sung)}
-                y2={y(sung)}
-                stroke={colors.ink}
-                strokeWidth={1.5}
-                strokeDasharray="2 5"
-              />
               <Circle
                 cx={columnX + columnWidth / 2}
                 cy={y(sung)}

@@ -11,6 +11,7 @@ import type { LiveSound } from "../recorder/liveSound";
 import { enoughHoldS, holdNow, leastHoldS } from "./guidedHold";
 import { GuidedLadder } from "./GuidedLadder";
 import type { GuidedEvent, GuidedState } from "./guidedSteps";
+import { StopSigns } from "./StopSigns";
 import { againIsSmaller, enoughWords, soFarWords, stepWords } from "./guidedWords";
 
 export interface GuidedStepProps {
@@ -23,7 +24,9 @@ const aroundLadder = 56 + 96 + 220;
 
 /** One note of the way: what to do, the ladder, how long it is held, and the two ways out. */
 export function GuidedStep({ state, live, onTell }: GuidedStepProps) {
-  const phone = useLayout() === "phone";
+  const layout = useLayout();
+  const phone = layout === "phone";
+  const wide = layout === "wide";
   const { height } = useWindowDimensions();
   const { run, step } = state;
   const { title, text } = stepWords(state);
@@ -34,28 +37,38 @@ export function GuidedStep({ state, live, onTell }: GuidedStepProps) {
       back="/voice"
       closes
       hideBar
+      wide
     >
-      <View style={{ gap: 2, paddingTop: 8, minHeight: 88 }} testID={`guided-${step}`}>
-        <Text
-          variant="title"
-          tone={step === "held" ? "lagoon" : "ink"}
-          style={{ fontSize: 26, lineHeight: 32 }}
-          testID="guided-title"
-        >
-          {title}
-        </Text>
-        <Text tone="soft">{text}</Text>
-      </View>
-      <GuidedLadder
-        run={run}
-        live={live}
-        listening={step === "listening"}
-        height={Math.max(200, Math.min(520, height - aroundLadder - (phone ? 0 : 60)))}
-      />
-      <View style={{ gap: 14, paddingTop: 16, marginTop: "auto", width: "100%", maxWidth: 600 }}>
-        <HoldRow live={live} state={state} />
-        <LevelRow live={live} on={step === "listening"} />
-        <Ways state={state} onTell={onTell} />
+      <View style={{ flexDirection: "row", gap: 48, flexGrow: 1 }}>
+        <View style={{ flexGrow: 1, flexBasis: 0, maxWidth: 760 }}>
+          <View style={{ gap: 2, paddingTop: 8, minHeight: 88 }} testID={`guided-${step}`}>
+            <Text
+              variant="title"
+              tone={step === "held" ? "lagoon" : "ink"}
+              style={{ fontSize: 26, lineHeight: 32 }}
+              testID="guided-title"
+            >
+              {title}
+            </Text>
+            <Text tone="soft">{text}</Text>
+          </View>
+          <GuidedLadder
+            run={run}
+            live={live}
+            listening={step === "listening"}
+            height={Math.max(200, Math.min(520, height - aroundLadder - (phone ? 0 : 60)))}
+          />
+          <View style={{ gap: 14, paddingTop: 16, marginTop: "auto", width: "100%", maxWidth: 600 }}>
+            <HoldRow live={live} state={state} />
+            <LevelRow live={live} on={step === "listening"} />
+            <Ways state={state} onTell={onTell} />
+          </View>
+        </View>
+        {wide && (
+          <View style={{ width: 380 }}>
+            <StopSigns />
+          </View>
+        )}
       </View>
     </Screen>
   );

@@ -62,7 +62,8 @@ function Drawing({ points, width }: { points: readonly TrendPoint[]; width: numb
   const at = (k: number) => places[k] ?? 0;
   const line = (of: (point: TrendPoint) => number) => points.map((point, k) => `${at(k)},${y(of(point))}`).join(" ");
   const rungs = Array.from({ length: high - low + 1 }, (_, k) => low + k).filter(isNatural);
-  const named = rungs.filter((midi) => step * 1.7 >= 14 || [0, 4, 9].includes(midi % 12));
+  // Neighbours like E and F would run into each other.
+  const named = rungs.filter((midi) => step >= 13 || (step >= 6.5 ? [0, 4, 7, 9] : [0, 7]).includes(midi % 12));
   return (
     <Svg width={width} height={height} role="img" aria-label={trendWords(points)}>
       <Hatch id={id} pitch={6} line={2.4} />

@@ -78,7 +78,7 @@ describe("ways that players know", () => {
   test("standard down one plus capo 1 is standard: the same shapes, so it is nothing to propose", () => {
     const ways = findWays({ chords: ["G", "C", "D"], from: major("G"), to: major("G"), instrument: guitar });
     expect(find(ways, -1, 1)).toBeUndefined();
-    expect(ways[0]).toMatchObject({ retune: 0, capo: 0, shapeKey: "G", title: "Leave it as it is, play shapes in G" });
+    expect(ways[0]).toMatchObject({ retune: 0, capo: 0, shapeKey: "G", title: "As tuned, play shapes in G" });
   });
 
   test("with a capo the banjo's short string needs its own stop as many frets up", () => {

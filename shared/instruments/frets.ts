@@ -31,6 +31,28 @@ export function fretSpanMm(scaleMm: number, lower: number, higher: number): numb
   return fretPosition(scaleMm, higher) - fretPosition(scaleMm, lower);
 }
 
+/** Semitones within an octave that a diatonic fretboard counts by whole numbers: the scale with a flat seventh. */
+const counted = new Set([0, 2, 4, 5, 7, 9, 10]);
+
+/**
+ * What players call a fret. On a diatonic fretboard the frets of the scale are counted, and one between two of them is
+ * the half after the lower: 6½ lies between 6 and 7.
+ *
+ * @param instrument for its fret map, if it has one
+ * @param fret place on the neck, 0 = open
+ * @returns "6½", "7"; the plain number where frets are chromatic or the fretboard has no such fret
+ * @see common practice of players of the mountain dulcimer
+ * @example fretName({ frets: 8, fretMap: [2, 4, 5, 7, 9, 10, 11, 12] }, 7) // => "6½"
+ */
+export function fretName(instrument: Pick<Instrument, "frets" | "fretMap">, fret: number): string {
+  const semitones = fretSemitones(instrument, fret);
+  if (!instrument.fretMap || semitones === null) return String(fret);
+  let whole = 0;
+  for (let at = 1; at <= semitones; at++) if (counted.has(at % 12)) whole++;
+  if (counted.has(semitones % 12)) return String(whole);
+  return whole === 0 ? "½" : `${whole}½`;
+}
+
 /**
  * Semitones that a fret raises the open string.
  *

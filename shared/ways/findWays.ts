@@ -4,6 +4,7 @@ import type { Instrument } from "../instruments/instrument";
 import { tensionChanges } from "../instruments/tension";
 import { handPath, type HandPath } from "./handPath";
 import { easeOf } from "./shapeEase";
+import { missingShapes } from "./missingShapes";
 import { stockOf } from "./shapeLibrary";
 import type { StringChange, Way, WayChord, WayPreferences } from "./way";
 import { wayCautions, wayCost, wayTitle, wayWhy, type WayFacts } from "./wayWords";
@@ -49,6 +50,8 @@ interface Candidate {
   shapeKey: KeyName;
   asWritten: boolean;
   chords: WayChord[];
+  /** how many chords the instrument has no shape for */
+  missing: number;
   withoutBass: string[];
   allKnown: boolean;
   path: HandPath;
@@ -62,9 +65,10 @@ interface Candidate {
 /**
  * Every sensible way of reaching a key on an instrument: retune r, capo c and shapes of key X with r + c + X = target.
  *
- * Ways with an unsafe string are left out, and so are those that another way beats or equals in everything. First come
- * the best as it is, the best capo, the best retune and the best mix of both, by cost; then the rest, by cost. Within a
- * kind, and among the first of each kind, disliking something more never promotes a way that has more of it.
+ * Ways with an unsafe string are left out, and so are those that another way beats or equals in everything, and those
+ * whose capo only undoes the retune. First come the best as it is, the best capo, the best retune and the best mix of
+ * both, then the rest: those with fewer missing shapes before those with more, then by cost. Within a kind, and among
+ * the first of each kind, disliking something more never promotes a way that has more of it.
  *
  * @param question chords, keys, instrument and the player's wishes
  * @returns ways, best first; one with nothing retuned and no capo is always among them
@@ -144,6 +148,7 @@ function candidate(
     shapeKey,
     asWritten: tonicPitchClass(shapeKey.tonic) === home,
     chords,
+    missing: missingShapes(chords).names.length,
     withoutBass: played.filter(({ stock }) => stock?.withoutBass).map(({ text }) => text),
     allKnown: played.length > 0 && played.every((chord) => chord.known === true),
     path,
@@ -162,9 +167,12 @@ function stringChanges(instrument: Instrument, retune: number): StringChange[] {
 
 /** At least as good in everything that can be weighed, and better in something. */
 function dominates(a: Candidate, b: Candidate): boolean {
+  // A capo that only undoes the retune leaves the instrument as it is, with looser strings and fewer frets.
+  if (b.retune !== 0 && b.retune + b.capo === 0 && a.retune === 0 && a.capo === 0) return true;
   // A capo one fret higher spares the strings, so tuning up is nothing to go with a capo.
   if (b.retune > 0 && b.capo > 0 && a.retune === 0 && a.capo === b.capo + b.retune) return true;
   const worth = (way: Candidate) => [
+    way.missing,
     way.capo,
     Math.abs(way.retune),
     way.retune > 0 ? 1 : 0,
@@ -178,15 +186,27 @@ function dominates(a: Candidate, b: Candidate): boolean {
   return easier > alike || first.some((cost, k) => cost < second[k]!);
 }
 
-/** Without ways that cost far more than the best one, but for those that keep the chart or the instrument as it is. */
+/**
+ * Without ways that lack more shapes or cost far more than the best one, but for those that keep the chart or the
+ * instrument as it is.
+ */
 function worthwhile(ways: readonly Candidate[]): Candidate[] {
-  const best = Math.min(...ways.map(({ total }) => total));
-  return ways.filter(({ kind, asWritten, total }) => kind === "as-is" || asWritten || total <= best + tooMuchMore);
+  const fewest = Math.min(...ways.map(({ missing }) => missing));
+  const best = Math.min(...ways.filter(({ missing }) => missing === fewest).map(({ total }) => total));
+  return ways.filter(
+    ({ kind, asWritten, missing, total }) =>
+      kind === "as-is" || asWritten || (missing === fewest && total <= best + tooMuchMore),
+  );
 }
 
 function inOrder(ways: readonly Candidate[]): Candidate[] {
   const byCost = [...ways].sort(
-    (a, b) => a.total - b.total || a.capo - b.capo || Math.abs(a.retune) - Math.abs(b.retune) || a.retune - b.retune,
+    (a, b) =>
+      a.missing - b.missing ||
+      a.total - b.total ||
+      a.capo - b.capo ||
+      Math.abs(a.retune) - Math.abs(b.retune) ||
+      a.retune - b.retune,
   );
   const first = byCost.filter((way, k) => byCost.findIndex(({ kind }) => kind === way.kind) === k);
   return [...first, ...byCost.filter((way) => !first.includes(way))];

@@ -1,8 +1,10 @@
 import type { KeyName } from "../music/keyName";
-import { parseChord } from "../music/chord";
 import { glyphs } from "../music/pitch";
+import { fretName } from "../instruments/frets";
 import type { Instrument } from "../instruments/instrument";
 import { tensionRatio } from "../instruments/tension";
+import { leftOutWords } from "./leftOutTones";
+import { missingShapes, missingWords } from "./missingShapes";
 import type { Shape, StringChange, Way, WayChord } from "./way";
 
 /** What the words about a way are made from. */
@@ -49,7 +51,7 @@ const counts = [
 export function wayTitle({ kind, retune, capo, shapeKey, allKnown }: WayFacts): string {
   const name = keyInWords(shapeKey);
   const shapes = allKnown ? `play the shapes you know in ${name}` : `play shapes in ${name}`;
-  if (kind === "as-is") return `Leave it as it is, ${shapes}`;
+  if (kind === "as-is") return `As tuned, ${shapes}`;
   if (kind === "capo") return `Capo ${capo}, ${shapes}`;
   const tuning = `Retune ${distanceInWords(retune)}`;
   return kind === "retune" ? `${tuning}, ${shapes}` : `${tuning}, capo ${capo}, ${shapes}`;
@@ -62,7 +64,14 @@ export function wayTitle({ kind, retune, capo, shapeKey, allKnown }: WayFacts): 
  * @returns one to three short sentences
  */
 export function wayCost({ retune, capo, chords, asWritten, instrument }: WayFacts): string {
-  const sentences = [shapeKinds(chords.flatMap(({ shape }) => (shape ? [shape] : [])))];
+  const missing = missingWords(chords);
+  const sentences = [
+    missing === null ? "" : `${capitalized(missing)}.`,
+    shapeKinds(
+      chords.flatMap(({ shape }) => (shape ? [shape] : [])),
+      missing !== null,
+    ),
+  ];
   if (asWritten) sentences.push("The chart as written.");
   const strings = instrument.strings.length;
   if (retune !== 0) sentences.push(`${counts[strings] ?? strings} strings to ${retune < 0 ? "let down" : "bring up"}.`);
@@ -76,13 +85,14 @@ export function wayCost({ retune, capo, chords, asWritten, instrument }: WayFact
  * @param facts of the way
  * @returns one or two sentences
  */
-export function wayWhy({ kind, difficulty, chords, asWritten }: WayFacts): string {
+export function wayWhy({ kind, difficulty, chords, asWritten, instrument }: WayFacts): string {
   const shapes = chords.flatMap(({ shape }) => (shape ? [shape] : []));
-  const word = difficulty < 0.4 ? "Easy" : difficulty < 0.47 ? "Middling" : "Harder";
+  const missing = missingWords(chords);
+  const word = missing !== null ? "Harder" : difficulty < 0.4 ? "Easy" : difficulty < 0.47 ? "Middling" : "Harder";
   const frets = shapes.flatMap(({ frets }) => frets.filter((fret) => fret !== null && fret > 0));
   const highest = Math.max(0, ...frets.map((fret) => fret ?? 0));
   const barres = chords.filter(({ shape }) => shape?.barre).map(({ played }) => glyphs(played));
-  const within = highest === 0 ? "open strings alone" : `all within the first ${plural(highest, "fret")}`;
+  const within = highest === 0 ? "open strings alone" : withinFrets(highest, instrument);
   const barreWords =
     barres.length === 0 ? "no barre" : `${barres.length === 1 ? "a barre" : "barres"} for ${list(barres)}`;
   const effect: Record<Way["kind"], string> = {
@@ -91,7 +101,14 @@ export function wayWhy({ kind, difficulty, chords, asWritten }: WayFacts): strin
     retune: asWritten ? "You read the chart as it stands." : "No capo on the neck.",
     "retune-capo": asWritten ? "You read the chart as it stands." : "Retune and capo meet half way.",
   };
-  return `${word}: ${within}, ${barreWords}. ${effect[kind]}`;
+  if (missing !== null && shapes.length === 0) return `${word}: ${missing}. ${effect[kind]}`;
+  const lack = missing === null ? "" : `${missing}; the others `;
+  return `${word}: ${lack}${missing === null ? within : within.replace(/^all /, "")}, ${barreWords}. ${effect[kind]}`;
+}
+
+function withinFrets(highest: number, instrument: Instrument): string {
+  if (instrument.fretMap) return `all up to fret ${fretName(instrument, highest)}`;
+  return `all within the first ${plural(highest, "fret")}`;
 }
 
 /**
@@ -102,10 +119,10 @@ export function wayWhy({ kind, difficulty, chords, asWritten }: WayFacts): strin
  */
 export function wayCautions({ retune, capo, chords, withoutBass, strings, instrument }: WayFacts): string[] {
   const cautions: string[] = [];
-  const missing = chords
-    .filter(({ shape, played }) => shape === null && parseChord(played) !== null)
-    .map(({ played }) => glyphs(played));
+  const missing = missingShapes(chords).names.map(glyphs);
   if (missing.length > 0) cautions.push(`This instrument has no playable shape for ${list(missing)}.`);
+  const partial = chords.map(({ played, shape }) => (shape ? leftOutWords(played, shape, instrument) : null));
+  cautions.push(...new Set(partial.filter((words) => words !== null)));
   if (retune !== 0) cautions.push(...tensionCautions(retune, strings, instrument));
   const short = instrument.strings.findIndex(({ startsAtFret }) => startsAtFret !== undefined);
   if (short >= 0) {
@@ -158,18 +175,23 @@ function distanceInWords(semitones: number): string {
   return `${words[size] ?? `${size} semitones`} ${semitones < 0 ? "down" : "up"}`;
 }
 
-function shapeKinds(shapes: readonly Shape[]): string {
+function shapeKinds(shapes: readonly Shape[], partly: boolean): string {
   const barre = shapes.filter((shape) => shape.barre).length;
   const open = shapes.filter((shape) => !shape.barre && shape.frets.includes(0)).length;
   const closed = shapes.length - barre - open;
   if (shapes.length === 0) return "";
-  if (barre === 0 && closed === 0) return "Open shapes only, no barre.";
+  if (barre === 0 && closed === 0)
+    return partly ? "The others are open shapes, no barre." : "Open shapes only, no barre.";
   const kinds = [...(open > 0 ? [`${counted(open)} open`] : []), ...(closed > 0 ? [`${counted(closed)} closed`] : [])];
   const last = closed > 0 ? closed : open;
   const named = kinds.length > 0 ? `${kinds.join(" and ")} shape${last === 1 ? "" : "s"}` : "";
   const barres = barre === 0 ? "no barre" : barre === 1 ? "one barre" : `${counted(barre)} barres`;
   const sentence = named === "" ? barres : `${named}, ${barres}`;
-  return `${sentence.charAt(0).toUpperCase()}${sentence.slice(1)}.`;
+  return `${capitalized(sentence)}.`;
+}
+
+function capitalized(sentence: string): string {
+  return `${sentence.charAt(0).toUpperCase()}${sentence.slice(1)}`;
 }
 
 function keyInWords(key: KeyName): string {

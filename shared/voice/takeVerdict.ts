@@ -7,11 +7,12 @@ import type { Verdict } from "./takeReport";
 /** Least held singing for a range in a phrase, in seconds. */
 const LEAST_HELD_S = 1.2;
 const LEAST_HELD_IN_HOLD_S = 0.5;
+/** A phrase of fewer pitches shows no range. */
+const LEAST_PITCHES = 3;
 const QUIET_DB = -60;
 const FAINT_DB = -42;
 const MIXED_AT_MOST = 0.35;
 const VOICED_AT_LEAST = 0.4;
-const SPEECH_FROM = 1.2;
 const CLIPPED_BEYOND_USE = 0.05;
 
 /** Everything a verdict is made from. */
@@ -36,14 +37,13 @@ export function judgeTake(evidence: Evidence): Verdict {
   const loudest = frames.reduce((top, f) => Math.max(top, f.levelDb), -Infinity);
   if (loudest < QUIET_DB) return "too-quiet";
   const signs = findSigns(frames, notes);
-  const enough = signs.heldS >= (hold ? LEAST_HELD_IN_HOLD_S : LEAST_HELD_S);
-  if (enough && !signs.plucked && !signs.whistled) {
-    if (signs.mixedShare > MIXED_AT_MOST) return "several-voices";
-    if (signs.voicedShare >= VOICED_AT_LEAST && (hold || signs.speechLikeness < SPEECH_FROM)) return "heard";
-  }
-  if (signs.plucked || signs.whistled) return "not-singing";
+  const enough = hold ? signs.heldS >= LEAST_HELD_IN_HOLD_S : signs.heldS >= LEAST_HELD_S && signs.pitches >= LEAST_PITCHES;
+  if (signs.still || signs.whistled) return "not-singing";
+  const sung = signs.voicedShare >= VOICED_AT_LEAST && (hold || signs.speechLikeness < 0);
+  if (enough && signs.mixedShare > MIXED_AT_MOST) return "several-voices";
+  if (enough && sung) return "heard";
   if (evidence.clipped > CLIPPED_BEYOND_USE) return "clipped";
-  if (durationS < 2 || (!enough && signs.heldS > 0 && signs.voicedShare >= VOICED_AT_LEAST && signs.speechLikeness < SPEECH_FROM)) return "too-short";
+  if (durationS < 2 || (!enough && signs.heldS > 0 && sung)) return "too-short";
   if (room.levelDb === null && loudest < FAINT_DB) return "too-quiet";
   if (isNoise(frames, room)) return "too-noisy";
   return signs.mixedShare > MIXED_AT_MOST ? "several-voices" : "not-singing";

@@ -15,7 +15,7 @@ export const songQueries = {
       },
     }),
   detail: (id: string) =>
-    queryOptions({
+    queryOptions<Song>({
       queryKey: ["songs", id],
       queryFn: async ({ client }) => {
         try {

@@ -16,13 +16,7 @@ export const TrailGrid = memo(function TrailGrid({ width, height, low, high }: T
   return (
     <Svg width={width} height={height} viewBox={`0 0 ${width} ${height}`} aria-hidden style={{ position: "absolute" }}>
       {Array.from({ length: high - low + 1 }, (_, index) => high - index).map((midi) => (
-        <TrailLine
-          key={midi}
-          midi={midi}
-          y={trailY(place, midi)}
-          width={width}
-          names={step >= 13 || midi % 12 === 0 || step * 2 >= 13}
-        />
+        <TrailLine key={midi} midi={midi} y={trailY(place, midi)} width={width} names={isNamed(midi, step)} />
       ))}
       {Array.from({ length: trailSeconds + 1 }, (_, ago) => (
         <G key={ago}>
@@ -55,6 +49,13 @@ export const TrailGrid = memo(function TrailGrid({ width, height, low, high }: T
     </Svg>
   );
 });
+
+/** Names need 13 px each: on close lines E and B give way to their neighbours a semitone above, then all but C. */
+function isNamed(midi: number, step: number): boolean {
+  const note = ((midi % 12) + 12) % 12;
+  if (step >= 13 || note === 0) return true;
+  return step * 2 >= 13 && note !== 4 && note !== 11;
+}
 
 function TrailLine({ midi, y, width, names }: { midi: number; y: number; width: number; names: boolean }) {
   const natural = isNatural(midi);

@@ -128,7 +128,7 @@ export interface TrailPlace {
 }
 
 /** Left of the first second, and right of now. */
-export const trailMargins = { left: 52, right: 44 } as const;
+const trailMargins = { left: 52, right: 44 } as const;
 
 /** Px for one second. */
 export function trailPace({ width }: Pick<TrailPlace, "width">): number {

@@ -14,7 +14,7 @@ export type FailureKind = Unavailable | Refusal | Exclude<Verdict, "heard"> | "i
 export type Processing = "echo cancellation" | "noise suppression" | "automatic gain";
 
 /** A part of a take that was judged instead of the whole; `whole` is what the whole was judged to be. */
-export interface JudgedPart extends TakePart {
+interface JudgedPart extends TakePart {
   whole: TakeReport;
 }
 

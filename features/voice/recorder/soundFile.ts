@@ -3,8 +3,8 @@ export type SoundKind = "wav" | "mp3" | "m4a" | "ogg" | "webm" | "flac";
 /** Why a file cannot be used. */
 export type Refusal = "not-a-sound" | "unreadable-file" | "too-large" | "too-long" | "empty-file";
 
-export const largestFileBytes = 20 * 1024 * 1024;
-export const longestFileS = 600;
+const largestFileBytes = 20 * 1024 * 1024;
+const longestFileS = 600;
 
 /** At the full rate cut-off peaks stay flat and can be told; a long recording would then take a phone's whole memory. */
 const fullRate = 44_100;

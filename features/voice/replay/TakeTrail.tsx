@@ -6,7 +6,6 @@ import { Button } from "@/features/ui/Button";
 import { LiveText } from "@/features/ui/LiveText";
 import { Notice } from "@/features/ui/Notice";
 import { SvgLabel } from "@/features/ui/SvgLabel";
-import { Text } from "@/features/ui/Text";
 import { colors, mixtures, sizes } from "@/features/ui/theme";
 import { noteWord } from "../noteWords";
 import type { HeardTake } from "../recorder/recorder";
@@ -26,7 +25,7 @@ export interface TakeTrailProps {
 
 const height = 168;
 const widest = 560;
-const handleRoom = 14;
+const handleRoom = 22;
 const foot = 44;
 
 /** The take as it was sung: play it back with the trail moving along, and leave out its start or end. */

@@ -1,6 +1,6 @@
 import type { Take } from "@/shared/contract/take";
 import type { Voice } from "@/shared/contract/voice";
-import { singingVoiceOf } from "./singingVoiceOf";
+import { keyVoiceOf, singingVoiceOf } from "./singingVoiceOf";
 import { pickVoice } from "./useSingingVoice";
 
 const voice: Voice = { id: "v1", name: "My voice", byHand: null, createdAt: "2026-11-01T10:00:00.000Z" };
@@ -59,6 +59,33 @@ it("prefers notes set by hand, with comfort inside the range", () => {
   expect(singingVoiceOf({ ...voice, byHand }, [take("t1")])).toEqual({
     range: byHand.range,
     comfort: { lowMidi: 50, highMidi: 66 },
+  });
+});
+
+describe("the voice that keys are judged by", () => {
+  const phrase = take("t1", { range: { lowMidi: 55, highMidi: 69 }, estimate: { lowMidi: 53, highMidi: 71 } });
+
+  it("reaches as far as a phrase makes probable, and keeps what was heard apart", () => {
+    expect(keyVoiceOf(voice, [phrase])).toEqual({
+      range: { lowMidi: 53, highMidi: 71 },
+      comfort: phrase.comfort,
+      heard: { lowMidi: 55, highMidi: 69 },
+    });
+  });
+
+  it("ends where a guided hold has shown the end", () => {
+    const hold = take("t2", { kind: "hold", shows: "high", range: { lowMidi: 60, highMidi: 70 }, certainty: 0.9 });
+    const known = keyVoiceOf(voice, [phrase, hold]);
+    expect(known?.range.highMidi).toBe(70);
+    expect(known?.range.lowMidi).toBeLessThan(55);
+    const both = take("t3", { kind: "hold", range: { lowMidi: 54, highMidi: 70 }, certainty: 0.9 });
+    expect(keyVoiceOf(voice, [both])).toEqual(singingVoiceOf(voice, [both]));
+  });
+
+  it("is what was set by hand, nothing estimated", () => {
+    const byHand = { range: { lowMidi: 50, highMidi: 70 }, comfort: { lowMidi: 52, highMidi: 66 } };
+    expect(keyVoiceOf({ ...voice, byHand }, [phrase])).toEqual(byHand);
+    expect(keyVoiceOf(voice, [])).toBeNull();
   });
 });
 

@@ -20,6 +20,22 @@ export function singingVoiceOf(voice: Voice, takes: readonly Take[]): SingingVoi
   return { range, comfort: within(known.comfort, range) };
 }
 
+/**
+ * The voice that keys are judged by. A phrase shows only part of a voice: an end that no guided hold has shown is taken
+ * as far as the voice probably reaches, and `heard` keeps what was sung. Notes set by hand count as they are.
+ */
+export function keyVoiceOf(voice: Voice, takes: readonly Take[]): SingingVoice | null {
+  const singing = singingVoiceOf(voice, takes);
+  const profile = voice.byHand ? null : profileOf(voice, takes);
+  if (!singing || !profile) return singing;
+  const { range, estimate, lowFrom, highFrom } = profile;
+  const held = (id: string) => takes.some((take) => take.id === id && take.kind === "hold");
+  const lowMidi = held(lowFrom) ? range.lowMidi : Math.min(range.lowMidi, estimate.lowMidi);
+  const highMidi = held(highFrom) ? range.highMidi : Math.max(range.highMidi, estimate.highMidi);
+  if (lowMidi === range.lowMidi && highMidi === range.highMidi) return singing;
+  return { ...singing, range: { lowMidi, highMidi }, heard: singing.range };
+}
+
 /** A take as the engine merges it, its notes named by the singer's own tuning. */
 export function shownTake(take: Take): ShownTake {
   const { id, sungAt, certainty, effort, tuningCents, kind, shows } = take;

@@ -3,14 +3,18 @@ import { useMemo } from "react";
 import type { Voice } from "@/shared/contract/voice";
 import type { SingingVoice } from "@/shared/keys/keyScore";
 import { useChosenVoiceId } from "./chosenVoice";
-import { singingVoiceOf } from "./singingVoiceOf";
+import { keyVoiceOf, singingVoiceOf } from "./singingVoiceOf";
 import { voiceQueries } from "./voiceQueries";
 
 export interface SingingVoiceState {
   /** the voice spoken of: the one asked for, else the chosen one, else the first; null where there is none */
   voice: Voice | null;
-  /** its notes for the key scorer; null where nothing is known yet */
+  /** all voices, for what was decided with another one */
+  voices: readonly Voice[];
+  /** its notes; null where nothing is known yet */
   singing: SingingVoice | null;
+  /** the same for judging keys: with what a phrase makes probable */
+  forKeys: SingingVoice | null;
   isPending: boolean;
   error: Error | null;
 }
@@ -22,7 +26,15 @@ export function useSingingVoice(voiceId?: string): SingingVoiceState {
   const chosen = useChosenVoiceId();
   const voice = pickVoice(voices.data ?? [], voiceId, chosen);
   const singing = useMemo(() => (voice && takes.data ? singingVoiceOf(voice, takes.data) : null), [voice, takes.data]);
-  return { voice, singing, isPending: voices.isPending || takes.isPending, error: voices.error ?? takes.error };
+  const forKeys = useMemo(() => (voice && takes.data ? keyVoiceOf(voice, takes.data) : null), [voice, takes.data]);
+  return {
+    voice,
+    voices: voices.data ?? [],
+    singing,
+    forKeys,
+    isPending: voices.isPending || takes.isPending,
+    error: voices.error ?? takes.error,
+  };
 }
 
 /** The voice asked for, else the chosen one, else the first. */

@@ -1,5 +1,6 @@
-import { render, screen } from "@testing-library/react";
+import { act, render, screen, waitFor } from "@testing-library/react";
 import { parseChart } from "@/shared/songs/chart";
+import * as cells from "./chartCells";
 import { ChartView } from "./ChartView";
 
 const text = "Verse 1\nF#m            D\nLantern on the slipway\n\nplain words stay";
@@ -27,4 +28,38 @@ test("sections are headings and words without chords are there", () => {
 test("a chart of nothing shows nothing", () => {
   render(<ChartView chart={parseChart("")} />);
   expect(screen.getByTestId("chart").textContent).toBe("");
+});
+
+test("what was not read is marked, in words too", () => {
+  render(<ChartView chart={parseChart("G   H7   D\nlow tide and still")} />);
+  const sign = screen.getByTitle(/Not read as a chord/);
+  expect(sign.textContent).toBe("H7, not read");
+  expect(sign.style.textDecoration).toContain("dotted");
+  expect(screen.getAllByTitle(/Not read/)).toHaveLength(1);
+});
+
+const long = "G   C   D   G\nLow tide and still\n".repeat(500);
+const drawn = () => screen.getByTestId("chart").textContent?.match(/Low/g)?.length;
+
+test("a long chart is drawn whole, or as far as is asked for", async () => {
+  const { unmount } = render(<ChartView chart={parseChart(long)} />);
+  await waitFor(() => expect(drawn()).toBe(500));
+  unmount();
+  render(<ChartView chart={parseChart(long)} most={200} />);
+  await act(async () => undefined);
+  expect(drawn()).toBe(200);
+});
+
+test("a letter more in a long chart draws its own line only", () => {
+  const asked: string[] = [];
+  const before = cells.chartCells;
+  const spy = jest.spyOn(cells, "chartCells").mockImplementation((lyrics, chords) => {
+    asked.push(lyrics);
+    return before(lyrics, chords);
+  });
+  const { rerender } = render(<ChartView chart={parseChart(long)} most={100} />);
+  asked.length = 0;
+  rerender(<ChartView chart={parseChart(long.replace("still", "stills"))} most={100} />);
+  expect(asked).toEqual(["Low tide and stills"]);
+  spy.mockRestore();
 });

@@ -1,12 +1,14 @@
+import { memo, startTransition, useEffect, useState, type CSSProperties } from "react";
 import { View } from "react-native";
 import { Heading } from "@/features/ui/Heading";
 import { Text } from "@/features/ui/Text";
-import { colors } from "@/features/ui/theme";
-import { webProps, webStyle } from "@/features/ui/webStyle";
+import { setSigns } from "@/features/ui/textSigns";
+import { colors, fonts } from "@/features/ui/theme";
 import { glyphs } from "@/shared/music/pitch";
-import type { Chart, ChartLine, ChartSection } from "@/shared/songs/chart";
+import type { Chart, ChartLine } from "@/shared/songs/chart";
 import type { ChartToken } from "@/shared/songs/chordLine";
 import { chartCells } from "./chartCells";
+import { firstLines, sameLine, sameLines, type ShownSection } from "./shownLines";
 
 export interface ChartViewProps {
   chart: Chart;
@@ -14,93 +16,142 @@ export interface ChartViewProps {
   size?: number;
   /** level of the section headings */
   level?: 2 | 3;
+  /** so many lines and no more; else all, the later ones a moment after the first */
+  most?: number;
 }
 
+/** Lines drawn in one go: a page or two of them, so that a very long chart never holds up the page. */
+const atOnce = 150;
+
 /** A chart to read: every chord over its syllable, at any width. */
-export function ChartView({ chart, size = 15, level = 2 }: ChartViewProps) {
+export function ChartView({ chart, size = 15, level = 2, most = Infinity }: ChartViewProps) {
+  const [grown, setGrown] = useState(atOnce);
+  const limit = Math.min(most, grown);
+  const { sections, rest } = firstLines(chart, limit);
+  const grows = rest > 0 && limit < most;
+  useEffect(() => {
+    if (grows) startTransition(() => setGrown(grown + atOnce));
+  }, [grows, grown]);
   return (
     <View testID="chart" style={{ gap: 18 }}>
-      {chart.sections.map((section, index) => (
+      {sections.map((section, index) => (
         <Section key={index} section={section} size={size} level={level} />
       ))}
     </View>
   );
 }
 
-function Section({ section, size, level }: { section: ChartSection; size: number; level: 2 | 3 }) {
-  const lines = section.lines.slice(firstUsed(section.lines), lastUsed(section.lines) + 1);
-  if (section.label === null && lines.length === 0) return null;
-  return (
-    <View>
-      {section.label !== null && (
-        <View style={{ flexDirection: "row", alignItems: "center", gap: 10, marginBottom: 8 }}>
-          <Heading level={level} size={14} style={{ color: colors.inkSoft, fontWeight: "600", letterSpacing: 0 }}>
-            {section.label}
-          </Heading>
-          <View style={{ flexGrow: 1, height: 1, backgroundColor: colors.line }} />
-        </View>
-      )}
-      {lines.map((line, index) => (
-        <Line key={index} line={line} size={size} />
-      ))}
-    </View>
-  );
+interface SectionProps {
+  section: ShownSection;
+  size: number;
+  level: 2 | 3;
 }
 
-function Line({ line, size }: { line: ChartLine; size: number }) {
-  if (line.kind === "blank") return <View style={{ height: size * 0.8 }} />;
-  if (line.kind === "comment")
+const Section = memo(
+  function Section({ section: { label, lines }, size, level }: SectionProps) {
     return (
-      <Text variant="small" tone="soft" style={{ fontStyle: "italic", marginBottom: 4 }}>
-        {line.text.trim()}
-      </Text>
+      <View>
+        {label !== null && (
+          <View style={{ flexDirection: "row", alignItems: "center", gap: 10, marginBottom: 8 }}>
+            <Heading level={level} size={14} style={{ color: colors.inkSoft, fontWeight: "600", letterSpacing: 0 }}>
+              {label}
+            </Heading>
+            <View style={{ flexGrow: 1, height: 1, backgroundColor: colors.line }} />
+          </View>
+        )}
+        {lines.map((line, index) => (
+          <Line key={index} line={line} size={size} />
+        ))}
+      </View>
     );
-  if (line.kind === "lyrics") return <Row lyrics={line.lyrics} chords={[]} size={size} />;
-  return <Row lyrics={line.kind === "sung" ? line.lyrics : ""} chords={line.chords} size={size} />;
-}
+  },
+  (before, now) =>
+    before.size === now.size &&
+    before.level === now.level &&
+    before.section.label === now.section.label &&
+    sameLines(before.section.lines, now.section.lines),
+);
 
-/** One line: cells side by side that wrap as wholes. The chord stands before its words in the document, as it is read. */
+const Line = memo(
+  function Line({ line, size }: { line: ChartLine; size: number }) {
+    if (line.kind === "blank") return <div style={{ height: size * 0.8 }} />;
+    if (line.kind === "comment")
+      return (
+        <Text variant="small" tone="soft" style={{ fontStyle: "italic", marginBottom: 4 }}>
+          {line.text.trim()}
+        </Text>
+      );
+    if (line.kind === "lyrics") return <Row lyrics={line.lyrics} chords={[]} size={size} />;
+    return <Row lyrics={line.kind === "sung" ? line.lyrics : ""} chords={line.chords} size={size} />;
+  },
+  (before, now) => before.size === now.size && sameLine(before.line, now.line),
+);
+
+const wholes: CSSProperties = { display: "flex", flexWrap: "wrap", alignItems: "flex-end", marginBottom: 3 };
+const cellStyle: CSSProperties = { maxWidth: "100%" };
+
+/**
+ * One line: cells side by side that wrap as wholes. The chord stands before its words in the document, as it is read.
+ * Plain elements: a long chart has tens of thousands of them.
+ */
 function Row({ lyrics, chords, size }: { lyrics: string; chords: readonly ChartToken[]; size: number }) {
   const sung = lyrics.trim() !== "";
+  const over: CSSProperties = { position: "relative", height: size * 1.35 };
+  const words: CSSProperties = { display: "block", whiteSpace: "pre", lineHeight: sung ? `${size * 1.3}px` : "4px" };
   return (
-    <View style={{ flexDirection: "row", flexWrap: "wrap", alignItems: "flex-end", marginBottom: 3 }}>
+    <div data-mono="" style={{ ...wholes, font: `400 ${size}px/${size * 1.2}px ${fonts.mono}`, color: colors.ink }}>
       {chartCells(lyrics, chords).map((cell, index) => (
-        <View key={index} style={webStyle({ maxWidth: "100%" })}>
+        <div key={index} style={cellStyle}>
           {cell.chords.length > 0 && (
-            <View style={[{ height: size * 1.35 }, webStyle({ fontSize: size, position: "relative" })]}>
+            <div style={over}>
               {cell.chords.map((chord) => (
-                <Text
-                  key={chord.column}
-                  variant="monoBold"
-                  tone={chord.kind === "chord" || chord.kind === "no-chord" ? "plum" : "soft"}
-                  style={[
-                    { position: "absolute", bottom: 0, fontSize: size, lineHeight: size * 1.2 },
-                    webStyle({ left: `${chord.column}ch`, whiteSpace: "pre" }),
-                  ]}
-                >
-                  {glyphs(chord.text)}
-                </Text>
+                <Sign key={chord.column} chord={chord} />
               ))}
-            </View>
+            </div>
           )}
-          <Text
-            variant="mono"
-            {...webProps({ "aria-hidden": sung ? undefined : true })}
-            style={[{ fontSize: size, lineHeight: sung ? size * 1.3 : 4 }, webStyle({ whiteSpace: "pre" })]}
-          >
-            {sung ? cell.text : " ".repeat(cell.width)}
-          </Text>
-        </View>
+          <span aria-hidden={sung ? undefined : true} style={words}>
+            {sung ? setSigns(cell.text) : " ".repeat(cell.width)}
+          </span>
+        </div>
       ))}
-    </View>
+    </div>
   );
 }
 
-function firstUsed(lines: readonly ChartLine[]): number {
-  const index = lines.findIndex((line) => line.kind !== "blank");
-  return index < 0 ? lines.length : index;
-}
+const tones: Partial<Record<ChartToken["kind"], CSSProperties>> = {
+  chord: { color: colors.plum },
+  "no-chord": { color: colors.plum },
+  unread: {
+    color: colors.honeyText,
+    textDecoration: "underline dotted",
+    textDecorationThickness: 2,
+    textUnderlineOffset: 3,
+  },
+};
+const spokenOnly: CSSProperties = {
+  position: "absolute",
+  width: 1,
+  height: 1,
+  overflow: "hidden",
+  clipPath: "inset(50%)",
+  whiteSpace: "nowrap",
+  userSelect: "none",
+};
 
-function lastUsed(lines: readonly ChartLine[]): number {
-  return lines.reduce((last, line, index) => (line.kind === "blank" ? last : index), -1);
+function Sign({ chord: { column, text, kind } }: { chord: ChartToken }) {
+  const place: CSSProperties = {
+    position: "absolute",
+    bottom: 0,
+    left: `${column}ch`,
+    whiteSpace: "pre",
+    fontWeight: 600,
+    color: colors.inkSoft,
+  };
+  const unread = kind === "unread";
+  return (
+    <span style={{ ...place, ...tones[kind] }} title={unread ? "Not read as a chord: it stays as it is" : undefined}>
+      {setSigns(glyphs(text))}
+      {unread && <span style={spokenOnly}>, not read</span>}
+    </span>
+  );
 }

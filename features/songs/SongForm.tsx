@@ -3,15 +3,12 @@ import { Controller, useForm, useWatch } from "react-hook-form";
 import { View } from "react-native";
 import { Field } from "@/features/ui/Field";
 import { Form } from "@/features/ui/Form";
-import { Heading } from "@/features/ui/Heading";
 import { Notice } from "@/features/ui/Notice";
-import { Text } from "@/features/ui/Text";
-import { colors } from "@/features/ui/theme";
 import { useLayout } from "@/features/ui/useLayout";
 import type { Song } from "@/shared/contract/song";
-import { parseChart, type Chart } from "@/shared/songs/chart";
+import { parseChart } from "@/shared/songs/chart";
 import { findKey } from "@/shared/songs/findKey";
-import { ChartView } from "./ChartView";
+import { ChartPreview } from "./ChartPreview";
 import { draftStore } from "./draftStore";
 import { KeyChooser } from "./KeyChooser";
 import { draftErrors, songFromDraft, type DraftErrors, type SongDraft, type SongOrigin } from "./songDraft";
@@ -105,7 +102,10 @@ export function SongForm({ draft, songId, origin, problem, onSave, frame }: Song
         >{`${problem.message} Everything you typed is still here.`}</Notice>
       )}
       {wrong.length > 0 && (
-        <Notice kind="error" title="Something is missing">
+        <Notice
+          kind="error"
+          title={wrong.length === 1 ? "One thing needs mending" : `${wrong.length} things need mending`}
+        >
           {wrong.join(" ")}
         </Notice>
       )}
@@ -119,7 +119,7 @@ export function SongForm({ draft, songId, origin, problem, onSave, frame }: Song
             hint: "Paste or type it: a line of chords, under it the words. Name the parts, like Verse or Chorus, on lines of their own.",
           })}
           <UnreadSigns signs={chart.unread} />
-          {!wide && <Preview chart={chart} />}
+          {!wide && <ChartPreview chart={chart} />}
           <View style={{ flexDirection: "row", gap: 12 }}>
             <View style={{ flexGrow: 1, flexBasis: 0, minWidth: 0 }}>
               {text("beatsPerBar", "Beats in a bar", { inputMode: "numeric" })}
@@ -140,7 +140,7 @@ export function SongForm({ draft, songId, origin, problem, onSave, frame }: Song
         <View style={wide ? column : { gap: 20 }}>
           <KeyChooser finding={finding} chosen={typed.key} onChoose={(key) => change({ key })} />
           {wide ? (
-            <Preview chart={chart} />
+            <ChartPreview chart={chart} />
           ) : (
             <TuneFields
               draft={typed}
@@ -154,21 +154,4 @@ export function SongForm({ draft, songId, origin, problem, onSave, frame }: Song
     </Form>
   );
   return frame(form, () => void submit());
-}
-
-function Preview({ chart }: { chart: Chart }) {
-  return (
-    <View style={{ gap: 10, borderTopWidth: 1, borderColor: colors.line, paddingTop: 12 }} testID="preview">
-      <Heading level={2} size={16}>
-        How it reads
-      </Heading>
-      {chart.sections.some((section) => section.lines.some((line) => line.kind !== "blank")) ? (
-        <ChartView chart={chart} level={3} />
-      ) : (
-        <Text variant="small" tone="soft">
-          Here the chords stand over their syllables as soon as there is a line of them.
-        </Text>
-      )}
-    </View>
-  );
 }

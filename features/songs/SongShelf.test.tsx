@@ -22,7 +22,7 @@ test("each song says its written key, and the decided key with its words where t
       myKey={(song) =>
         song.title === "Gulls"
           ? null
-          : { sign: "C", words: "My key, a whole tone under the chart", strip: <i>strip</i> }
+          : { key: { tonic: "C", mode: "major" } as const, words: "My key, a whole tone under the chart", strip: <i>strip</i> }
       }
     />,
   );
@@ -30,6 +30,12 @@ test("each song says its written key, and the decided key with its words where t
     "DGullsWritten in D, no melody yet.",
     "CSlack WaterMy key, a whole tone under the chart. Written in D.strip",
   ]);
+});
+
+test("a mode is set small beside its tonic and spoken in full", () => {
+  render(<SongShelf songs={[aSong({ title: "Gulls", writtenKey: { tonic: "Eb", mode: "mixolydian" } })]} myKey={() => null} />);
+  expect(screen.getByText("mixo.")).toBeTruthy();
+  expect(screen.getByText(/E.* mixolydian/, { selector: "div" })).toBeTruthy();
 });
 
 test("the search narrows the shelf and says when nothing fits", () => {

@@ -4,17 +4,19 @@ import { View, type TextStyle } from "react-native";
 import { EmptyState } from "@/features/ui/EmptyState";
 import { Field } from "@/features/ui/Field";
 import { Icon } from "@/features/ui/Icon";
+import { KeySign } from "@/features/ui/KeySign";
 import { LinkButton } from "@/features/ui/LinkButton";
 import { LiveText } from "@/features/ui/LiveText";
 import { Text } from "@/features/ui/Text";
 import { colors, fonts } from "@/features/ui/theme";
 import { webStyle } from "@/features/ui/webStyle";
 import type { Song } from "@/shared/contract/song";
+import type { KeyName } from "@/shared/music/keyName";
 import { songFacts, songsNamed } from "./songFacts";
 
 /** What the shelf shows of the key that was decided for a song. */
 export interface ShelfKey {
-  sign: string;
+  key: KeyName;
   /** such as "My key, a whole tone under the chart" */
   words: string;
   strip: ReactNode;
@@ -67,6 +69,7 @@ export function SongShelf({ songs, myKey }: SongShelfProps) {
 
 function SongRow({ song, mine }: { song: Song; mine: ShelfKey | null }) {
   const facts = songFacts(song);
+  const key = mine?.key ?? song.writtenKey;
   return (
     <Link
       href={{ pathname: "/songs/[id]", params: { id: song.id } }}
@@ -77,12 +80,13 @@ function SongRow({ song, mine }: { song: Song; mine: ShelfKey | null }) {
       ]}
     >
       <View style={{ width: 44, flexShrink: 0 }} aria-hidden>
-        <Text
-          tone={mine ? "ink" : "soft"}
-          style={{ fontFamily: fonts.display, fontWeight: "700", fontSize: 26, lineHeight: 30 }}
-        >
-          {mine?.sign ?? facts.sign ?? "–"}
-        </Text>
+        {key ? (
+          <KeySign of={key} size={26} tone={mine ? "ink" : "soft"} stacked />
+        ) : (
+          <Text tone="soft" style={{ fontFamily: fonts.display, fontWeight: "700", fontSize: 26, lineHeight: 30 }}>
+            –
+          </Text>
+        )}
       </View>
       <View
         style={{

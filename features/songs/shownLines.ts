@@ -1,0 +1,52 @@
+import type { Chart, ChartLine } from "@/shared/songs/chart";
+
+/** A part of a chart as it is drawn: no blank lines at its ends. */
+export interface ShownSection {
+  label: string | null;
+  lines: readonly ChartLine[];
+}
+
+/** The first lines of a chart, and how many more there are. */
+export function firstLines(chart: Chart, most: number): { sections: ShownSection[]; rest: number } {
+  const sections: ShownSection[] = [];
+  let room = most;
+  let rest = 0;
+  for (const { label, lines } of chart.sections) {
+    const used = lines.slice(firstUsed(lines), lastUsed(lines) + 1);
+    if (room > 0 && (label !== null || used.length > 0)) sections.push({ label, lines: used.slice(0, room) });
+    rest += Math.max(0, used.length - room);
+    room = Math.max(0, room - used.length);
+  }
+  return { sections, rest };
+}
+
+/** Whether two lines look the same; what was read from them follows from what is written. */
+export function sameLine(one: ChartLine, other: ChartLine): boolean {
+  return one === other || (one.kind === other.kind && writtenIn(one) === writtenIn(other));
+}
+
+export function sameLines(one: readonly ChartLine[], other: readonly ChartLine[]): boolean {
+  return one.length === other.length && one.every((line, index) => sameLine(line, other[index]!));
+}
+
+function writtenIn(line: ChartLine): string {
+  switch (line.kind) {
+    case "sung":
+      return `${line.written}\n${line.lyrics}`;
+    case "chords":
+      return line.written;
+    case "lyrics":
+      return line.lyrics;
+    default:
+      return line.text;
+  }
+}
+
+function firstUsed(lines: readonly ChartLine[]): number {
+  const index = lines.findIndex((line) => line.kind !== "blank");
+  return index < 0 ? lines.length : index;
+}
+
+function lastUsed(lines: readonly ChartLine[]): number {
+  return lines.reduce((last, line, index) => (line.kind === "blank" ? last : index), -1);
+}

@@ -1,8 +1,10 @@
+import { readFileSync } from "node:fs";
 import type { Browser, Page } from "playwright-core";
 import { launchBrowser, openProfile, type Viewport } from "./browser";
 import { followTones, hum, type FollowingSinger } from "./followingSinger";
 import { startProduct, type Product } from "./product";
 
+const axe = readFileSync(require.resolve("axe-core/axe.min.js"), "utf8");
 let product: Product;
 let browser: Browser;
 
@@ -14,6 +16,14 @@ afterAll(async () => {
   await browser.close();
   await product.stop();
 });
+
+/** What axe finds on the page as it stands. */
+async function faults(page: Page): Promise<unknown> {
+  await page.evaluate(axe);
+  return page.evaluate(
+    "axe.run({ resultTypes: ['violations'] }).then((r) => r.violations.map(({ id, nodes }) => id + ': ' + nodes.map(({ target }) => target.join(' ')).join(', ')))",
+  );
+}
 
 async function open(voice: FollowingSinger, viewport: Viewport = "phone") {
   const profile = await openProfile(browser, product.address, viewport);
@@ -80,10 +90,17 @@ test("under 16 nothing is tried twice, and stopping early keeps what was held", 
   await page.getByTestId("guided-start").click();
   await page.getByText("Hum a comfortable note").first().waitFor();
   await hum(page);
+  await page
+    .getByText(/^Now sing/)
+    .first()
+    .waitFor();
+  expect(await faults(page)).toEqual([]);
   await page.getByTestId("guided-turn").waitFor({ timeout: 90_000 });
+  expect(await faults(page)).toEqual([]);
   expect(await page.getByTestId("guided-turn").textContent()).toContain("B♭3");
   await page.getByTestId("guided-finish").click();
   await page.getByTestId("guided-week").waitFor();
+  expect(await faults(page)).toEqual([]);
   expect(await page.getByTestId("guided-result").textContent()).toContain("Only the low end was looked for.");
   await context.close();
 }, 120_000);

@@ -80,7 +80,10 @@ async function move(manager: EntityManager, person: DemoPerson, passwordHash: st
   );
 }
 
-function toTake(voiceId: string, { kind = "phrase", sungAt, warmedUp, effort, comfort, sung }: DemoPerson["takes"][number]): Take {
+function toTake(
+  voiceId: string,
+  { kind = "phrase", sungAt, warmedUp, effort, comfort, sung }: DemoPerson["takes"][number],
+): Take {
   let at = 0.4;
   const notes = sung.map(([midi, seconds], k) => {
     const start = round(at);

@@ -34,7 +34,10 @@ test.each<[string, ShownTake[]]>([
   ["one take on each side", [take(0, 57, 77), take(50, 52, 70)]],
   ["the two semitones that days differ by", [take(0, 57, 77), take(3, 57, 77), take(50, 55, 75), take(56, 55, 75)]],
   ["takes of the same weeks", [take(0, 57, 77), take(1, 57, 77), take(10, 52, 70), take(12, 52, 70)]],
-  ["holds that looked for the other end only", [take(0, 57, 77, { hold: true, shows: "high" }), take(40, 50, 77, { hold: true, shows: "high" })]],
+  [
+    "holds that looked for the other end only",
+    [take(0, 57, 77, { hold: true, shows: "high" }), take(40, 50, 77, { hold: true, shows: "high" })],
+  ],
 ])("%s: nothing is said", (_, takes) => {
   expect(movingEnds(takes)).toEqual([]);
 });

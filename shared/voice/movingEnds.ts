@@ -10,9 +10,9 @@ export interface MovedEnd {
 }
 
 /** The takes of so many days up to the newest are what the voice is now. */
-export const RECENT_DAYS = 21;
+const RECENT_DAYS = 21;
 /** An end must have moved by this much: from one day to the next it may differ by two semitones. */
-export const LEAST_MOVE = 3;
+const LEAST_MOVE = 3;
 const LEAST_GAP_DAYS = 14;
 const DAY = 86_400_000;
 
@@ -24,7 +24,7 @@ const DAY = 86_400_000;
  * @param takes takes of one voice, any order
  * @returns the moved ends, low before high; empty where none moved or too little was sung to tell
  * @throws RangeError if a take has an unreadable time
- * @see FACTS of voice stability: session to session up to 2 semitones (Brown, Morris, Murry, J. Voice 10(3) 1996)
+ * @see Brown, Morris, Murry, J. Voice 10(3) 1996 (pitch from session to session: up to 2 semitones)
  */
 export function movingEnds(takes: readonly ShownTake[]): MovedEnd[] {
   const times = takes.map(({ sungAt }) => Date.parse(sungAt));
@@ -45,11 +45,18 @@ function movedEnd(takes: readonly ShownTake[], newest: number, end: "low" | "hig
     }));
   const recent = seen.filter(({ at }) => newest - at <= RECENT_DAYS * DAY);
   const earliestRecent = Math.min(...recent.map(({ at }) => at));
-  const earlier = seen.filter(({ at }) => newest - at > RECENT_DAYS * DAY && earliestRecent - at >= LEAST_GAP_DAYS * DAY);
+  const earlier = seen.filter(
+    ({ at }) => newest - at > RECENT_DAYS * DAY && earliestRecent - at >= LEAST_GAP_DAYS * DAY,
+  );
   const [farthestNow, agreedNow] = reaches(recent);
   const [farthestThen, agreedThen] = reaches(earlier);
   if (agreedNow === null || agreedThen === null || farthestNow === null || farthestThen === null) return null;
-  const move = agreedNow - farthestThen >= LEAST_MOVE ? agreedNow - farthestThen : agreedThen - farthestNow >= LEAST_MOVE ? farthestNow - agreedThen : 0;
+  const move =
+    agreedNow - farthestThen >= LEAST_MOVE
+      ? agreedNow - farthestThen
+      : agreedThen - farthestNow >= LEAST_MOVE
+        ? farthestNow - agreedThen
+        : 0;
   if (move === 0) return null;
   const weeks = Math.max(1, Math.round((middle(recent) - middle(earlier)) / (7 * DAY)));
   return { end, by: Math.round(side * move), weeks };

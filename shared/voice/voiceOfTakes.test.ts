@@ -79,7 +79,14 @@ test("a profile holds together: comfort inside range inside estimate", () => {
   fc.assert(
     fc.property(takes, (list) => {
       const { range, comfort, estimate } = voiceOfTakes(list)!;
-      const steps = [estimate.lowMidi, range.lowMidi, comfort.lowMidi, comfort.highMidi, range.highMidi, estimate.highMidi];
+      const steps = [
+        estimate.lowMidi,
+        range.lowMidi,
+        comfort.lowMidi,
+        comfort.highMidi,
+        range.highMidi,
+        estimate.highMidi,
+      ];
       steps.forEach((step, k) => k > 0 && expect(step).toBeGreaterThanOrEqual(steps[k - 1]! - 1e-9));
     }),
     { numRuns: 200, seed: 15 },

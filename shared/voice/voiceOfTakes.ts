@@ -42,10 +42,18 @@ export function voiceOfTakes(takes: readonly ShownTake[]): VoiceProfile | null {
     range,
     comfort: inside(range, { lowMidi: mean(forLow, easyLow), highMidi: mean(forHigh, easyHigh) }),
     estimate: {
-      lowMidi: held(low.lowFrom) ? range.lowMidi : Math.min(range.lowMidi, mean(forLow, (take) => take.estimate.lowMidi)),
+      lowMidi: held(low.lowFrom)
+        ? range.lowMidi
+        : Math.min(
+            range.lowMidi,
+            mean(forLow, (take) => take.estimate.lowMidi),
+          ),
       highMidi: held(high.highFrom)
         ? range.highMidi
-        : Math.max(range.highMidi, mean(forHigh, (take) => take.estimate.highMidi)),
+        : Math.max(
+            range.highMidi,
+            mean(forHigh, (take) => take.estimate.highMidi),
+          ),
     },
     certainty: whole.certainty,
     lowFrom: fits ? low.lowFrom : whole.lowFrom,

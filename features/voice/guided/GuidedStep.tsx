@@ -135,6 +135,15 @@ function Ways({ state, onTell }: Pick<GuidedStepProps, "state" | "onTell">) {
   }, [missed]);
   return (
     <View style={{ gap: 10 }} ref={first}>
+      {step === "listening" && run.target !== null && (
+        <Button
+          kind="text"
+          icon="play"
+          label="Hear the tone again"
+          onPress={() => onTell({ kind: "again" })}
+          testID="guided-tone-again"
+        />
+      )}
       {missed && (
         <Button
           icon="again"

@@ -82,6 +82,7 @@ export function createGuidedSession(emit: (event: GuidedEvent) => void, live: Li
     },
     async sound(midi) {
       const mine = round;
+      endListening();
       silence(live);
       await tone?.play(midi);
       await new Promise((resolve) => setTimeout(resolve, roomMs));

@@ -158,9 +158,16 @@ test("notes for a song stay among the held ones and in order, whatever is asked 
 
 test("an event that makes no sense in a step changes nothing", () => {
   const listening = guidedSteps(begun(), { kind: "toneEnded" });
-  for (const kind of ["opened", "toneEnded", "next", "again", "up"] as const) {
+  for (const kind of ["opened", "toneEnded", "next", "up"] as const) {
     expect(guidedSteps(listening, { kind })).toBe(listening);
   }
   expect(guidedSteps(beforeGuided, { kind: "judged", outcome: held(57) })).toBe(beforeGuided);
   expect(guidedSteps(listening, { kind: "leave" })).toEqual(beforeGuided);
+});
+
+test("the tone can be heard again before singing, which is no try", () => {
+  const listening = guidedSteps(begun(), { kind: "toneEnded" });
+  expect(guidedSteps(listening, { kind: "again" })).toEqual(begun());
+  const humming = after([start({ home: null }), { kind: "opened" }]);
+  expect(guidedSteps(humming, { kind: "again" })).toBe(humming);
 });

@@ -113,6 +113,7 @@ function atStep(state: Running, event: GuidedEvent): GuidedState {
     case "tone":
       return event.kind === "toneEnded" ? { step: "listening", run } : state;
     case "listening":
+      if (event.kind === "again") return run.target === null ? state : ask(run);
       return event.kind === "listened" ? { step: "judging", run } : state;
     case "judging":
       return event.kind === "judged" ? afterTry(run, event.outcome) : state;

@@ -204,7 +204,7 @@ function Legend() {
   );
 }
 
-export function dayWords(at: Date): string {
+function dayWords(at: Date): string {
   return new Intl.DateTimeFormat("en-GB", { day: "numeric", month: "short" }).format(at);
 }
 

@@ -137,7 +137,7 @@ describe("what cannot be used is refused with the reason", () => {
 
 test("a long recording says what is being done, and can be given up", async () => {
   const path = at("ten-minutes.mp3");
-  const many = ["-stream_loop", "50", "-i", voice.wav, "-t", "590", "-ac", "1", "-b:a", "64k", "-compression_level", "9"];
+  const many = ["-stream_loop", "70", "-i", voice.wav, "-t", "590", "-ac", "1", "-b:a", "64k", "-compression_level", "9"];
   execFileSync("ffmpeg", ["-v", "error", "-y", ...many, path]);
   const { context, page } = await open("wide");
   await choose(page, path);

@@ -1,6 +1,7 @@
 import { TextDecoder, TextEncoder } from "node:util";
 import { fireEvent, render, screen, waitFor, within } from "@testing-library/react";
 import type { Song } from "@/shared/contract/song";
+import * as cells from "./chartCells";
 import { draftStore } from "./draftStore";
 import { emptyDraft, type SongDraft } from "./songDraft";
 import { SongForm } from "./SongForm";
@@ -76,10 +77,29 @@ test("what is missing is said at its field, and nothing typed is lost", async ()
   type("Lowest note", "D");
   save();
   expect((await screen.findAllByText(/Give the song a title/)).length).toBeGreaterThan(0);
+  expect(screen.getByText("3 things need mending")).toBeTruthy();
   expect(screen.getByLabelText("Lowest note").getAttribute("aria-invalid")).toBe("true");
   await waitFor(() => expect(document.activeElement).toBe(screen.getByLabelText("Title")));
   expect((screen.getByLabelText(/^Chart/) as HTMLTextAreaElement).value).toBe(chart);
   expect(saved).toEqual([]);
+});
+
+test("one thing that is wrong is told as one, and not as missing", async () => {
+  open({ title: "x".repeat(201), chart });
+  save();
+  expect(await screen.findByText("One thing needs mending")).toBeTruthy();
+});
+
+test("typing in the title draws nothing of the chart anew", async () => {
+  open({ chart });
+  await screen.findByTestId("preview");
+  const spy = jest.spyOn(cells, "chartCells");
+  type("Title", "Slack Water");
+  await waitFor(() => expect(draftStore.load(null)?.title).toBe("Slack Water"));
+  expect(spy).not.toHaveBeenCalled();
+  type(/^Chart/, `${chart}s`);
+  await waitFor(() => expect(spy).toHaveBeenCalledTimes(1));
+  spy.mockRestore();
 });
 
 test("a refusal by the shelf keeps the form and says so", () => {
@@ -128,9 +148,11 @@ test("a melody file is read, and one that is none is refused in place", async ()
   const give = (each: File) => fireEvent.change(screen.getByTestId("melody-file"), { target: { files: [each] } });
   give(file("notes.txt", "nothing of use"));
   await waitFor(() => expect(screen.getByTestId("melody-refusal").textContent).toMatch(/^notes\.txt: /), readerLoads);
+  expect(screen.queryByTestId("tune-home")).toBeNull();
   give(file("slack.abc", "X:1\nT:Slack\nM:3/4\nL:1/4\nK:G\nG A B | d2 B | A G2 |]\n"));
   await waitFor(() => expect(screen.getByTestId("tune").textContent).toContain("7 notes, G4 to D5"), readerLoads);
   expect(screen.queryByTestId("melody-refusal")).toBeNull();
+  expect(screen.getByTestId("tune-home")).toBeTruthy();
   save();
   await waitFor(() => expect(saved[0]?.tune).toMatchObject({ kind: "melody", home: "G" }));
 });

@@ -1,4 +1,4 @@
-import { useState, type ReactNode } from "react";
+import { useMemo, useState, type ReactNode } from "react";
 import { useWindowDimensions, View } from "react-native";
 import { Button } from "@/features/ui/Button";
 import { Heading } from "@/features/ui/Heading";
@@ -16,7 +16,7 @@ import { shortMove } from "@/shared/music/moveWords";
 import { glyphs } from "@/shared/music/pitch";
 import { MovedChart } from "./MovedChart";
 import { RemoveSong } from "./RemoveSong";
-import { beatWords, headWords } from "./songFacts";
+import { beatWords, hasChords, headWords } from "./songFacts";
 
 /** The key that the page shows the chart in, besides the written one. */
 interface TargetKey {
@@ -52,7 +52,9 @@ export function SongScreen({ song, target, card, decided, keys, ways, use, onRem
   const wide = layout === "wide";
   // The wide page shows key and ways beside the chart, so it is shown in that key; the phone waits for a decision.
   const asWritten = turned ?? (!wide && target?.decided !== true);
-  const moved = target !== null && song.writtenKey !== null && target.key.tonic !== song.writtenKey.tonic;
+  const chords = useMemo(() => hasChords(song), [song]);
+  // Words alone look the same in every key.
+  const moved = chords && target !== null && song.writtenKey !== null && target.key.tonic !== song.writtenKey.tonic;
   const to = moved && !asWritten ? target.key : null;
   const params = { id: song.id };
   const targetSign = target && glyphs(keySign(target.key));
@@ -87,7 +89,11 @@ export function SongScreen({ song, target, card, decided, keys, ways, use, onRem
   if (wide) {
     const three = width >= threeColumnsFrom;
     return (
-      <Screen {...screen} subtitle={headWords(song, target?.decided ? targetSign : null)} actions={<WideActions id={song.id} use={use} />}>
+      <Screen
+        {...screen}
+        subtitle={headWords(song, target?.decided ? targetSign : null)}
+        actions={<WideActions id={song.id} use={use} />}
+      >
         <View
           style={webStyle({
             display: "grid",
@@ -109,7 +115,7 @@ export function SongScreen({ song, target, card, decided, keys, ways, use, onRem
                 marginBottom: 6,
               }}
             >
-              <Heading level={2}>{chartHeading(song, to)}</Heading>
+              <Heading level={2}>{chartHeading(song, chords, to)}</Heading>
               {moved && (
                 <View style={{ flexDirection: "row", alignItems: "center", gap: 4 }}>
                   <Text variant="small" tone="soft" style={{ fontSize: 13 }}>
@@ -151,18 +157,20 @@ export function SongScreen({ song, target, card, decided, keys, ways, use, onRem
       footer={
         <View style={{ flexDirection: "row", gap: 10 }}>
           <LinkButton
-            kind="secondary"
-            label="Keys"
+            kind={chords ? "secondary" : "primary"}
+            label={chords ? "Keys" : "Keys for your voice"}
             href={{ pathname: "/songs/[id]/keys", params }}
             style={{ flexGrow: 1 }}
             testID="to-keys"
           />
-          <LinkButton
-            label={targetSign === null ? "Ways to play it" : `Ways to play it in ${targetSign}`}
-            href={waysHref}
-            style={{ flexGrow: 3, flexShrink: 1 }}
-            testID="to-ways"
-          />
+          {chords && (
+            <LinkButton
+              label={targetSign === null ? "Ways to play it" : `Ways to play it in ${targetSign}`}
+              href={waysHref}
+              style={{ flexGrow: 3, flexShrink: 1 }}
+              testID="to-ways"
+            />
+          )}
         </View>
       }
     >
@@ -218,7 +226,8 @@ function WideActions({ id, use }: { id: string; use: ReactNode }) {
   );
 }
 
-function chartHeading(song: Song, to: KeyName | null): string {
+function chartHeading(song: Song, chords: boolean, to: KeyName | null): string {
+  if (!chords) return song.chart.trim() === "" ? "Chart" : "Words";
   const key = to ?? song.writtenKey;
   return key ? `Chart in ${glyphs(keySign(key))}` : "Chart";
 }

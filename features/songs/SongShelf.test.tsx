@@ -22,7 +22,11 @@ test("each song says its written key, and the decided key with its words where t
       myKey={(song) =>
         song.title === "Gulls"
           ? null
-          : { key: { tonic: "C", mode: "major" } as const, words: "My key, a whole tone under the chart", strip: <i>strip</i> }
+          : {
+              key: { tonic: "C", mode: "major" } as const,
+              words: "My key, a whole tone under the chart",
+              strip: <i>strip</i>,
+            }
       }
     />,
   );
@@ -33,7 +37,12 @@ test("each song says its written key, and the decided key with its words where t
 });
 
 test("a mode is set small beside its tonic and spoken in full", () => {
-  render(<SongShelf songs={[aSong({ title: "Gulls", writtenKey: { tonic: "Eb", mode: "mixolydian" } })]} myKey={() => null} />);
+  render(
+    <SongShelf
+      songs={[aSong({ title: "Gulls", writtenKey: { tonic: "Eb", mode: "mixolydian" } })]}
+      myKey={() => null}
+    />,
+  );
   expect(screen.getByText("mixo.")).toBeTruthy();
   expect(screen.getByText(/E.* mixolydian/, { selector: "div" })).toBeTruthy();
 });

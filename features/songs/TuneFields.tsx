@@ -30,6 +30,8 @@ const kinds = [
 
 /** What is known of the tune: nothing yet, its ends, or all its notes. */
 export function TuneFields({ draft, errors, writtenKey, onChange }: TuneFieldsProps) {
+  // A home note is asked for when there is a tune that it is the home of.
+  const hasTune = draft.tune === "span" || (draft.tune === "melody" && draft.melody !== null);
   return (
     <View style={{ gap: 14 }} testID="tune">
       <Heading level={2} size={16}>
@@ -67,7 +69,7 @@ export function TuneFields({ draft, errors, writtenKey, onChange }: TuneFieldsPr
         </View>
       )}
       {draft.tune === "melody" && <MelodyFileField melody={draft.melody} error={errors.melody} onChange={onChange} />}
-      {draft.tune !== "none" && (
+      {hasTune && (
         <Select
           label="Home note of the melody"
           testID="tune-home"
@@ -80,7 +82,7 @@ export function TuneFields({ draft, errors, writtenKey, onChange }: TuneFieldsPr
           onChange={(home) => onChange({ home })}
         />
       )}
-      {draft.tune !== "none" && writtenKey && differs(draft.home, writtenKey) && (
+      {hasTune && writtenKey && differs(draft.home, writtenKey) && (
         <Text variant="small" tone="soft" testID="tune-moved">
           {`The melody's home note is ${glyphs(draft.home)}, the chart's is ${glyphs(writtenKey.tonic)}. When you save, the melody is moved to ${glyphs(writtenKey.tonic)} so that both sound together.`}
         </Text>

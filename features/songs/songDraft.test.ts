@@ -68,6 +68,7 @@ test.each<[Partial<SongDraft>, keyof SongDraft]>([
   expect(() => songFromDraft(draft, inD, origin)).toThrow(RangeError);
 });
 
-test("a tune without any home note asks for one", () => {
+test("a tune without any home note asks for one, once there is a tune", () => {
+  expect(Object.keys(draftErrors({ ...typed, tune: "melody", melody: null }, null))).toEqual(["melody"]);
   expect(draftErrors(typed, null)).toEqual({ home: "Choose the home note of the tune." });
 });

@@ -86,7 +86,7 @@ export function draftErrors(draft: SongDraft, found: KeyName | null): DraftError
   if (draft.tune === "span") checkSpan(draft, errors);
   if (draft.tune === "melody" && draft.melody === null)
     errors.melody = "Choose a melody file, or set the lowest and highest note by hand.";
-  if (draft.tune !== "none" && draft.home === "" && (draft.key ?? found) === null)
+  if (draft.tune !== "none" && errors.melody === undefined && draft.home === "" && (draft.key ?? found) === null)
     errors.home = "Choose the home note of the tune.";
   return errors;
 }

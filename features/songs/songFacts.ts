@@ -1,17 +1,19 @@
 import type { Song } from "@/shared/contract/song";
 import { keySign, keyWords } from "@/shared/music/keyWords";
+import { distanceWords, moveWords } from "@/shared/music/moveWords";
 import { glyphs } from "@/shared/music/pitch";
+import { chartChords, parseChart } from "@/shared/songs/chart";
 
 /** What a list says of a song besides its title. */
 export interface SongFacts {
-  /** written key, short; null where none is known */
+  /** written key or home note, short; null where neither is known */
   sign: string | null;
   line: string;
 }
 
 export function songFacts(song: Song): SongFacts {
-  const sign = song.writtenKey && glyphs(keySign(song.writtenKey));
-  const key = sign === null ? "No key yet" : `Written in ${sign}`;
+  const sign = song.writtenKey ? glyphs(keySign(song.writtenKey)) : song.tune && glyphs(song.tune.home);
+  const key = song.writtenKey ? `Written in ${sign}` : homeWords(song);
   const parts = [
     key,
     song.demo === null ? null : "a song to try Larkspan with",
@@ -20,10 +22,27 @@ export function songFacts(song: Song): SongFacts {
   return { sign, line: `${parts.filter((part) => part !== null).join(", ")}.` };
 }
 
-/** Beat and tempo as the head of a chart says them: "4 beats, 84". */
+function homeWords({ tune }: Pick<Song, "tune">): string {
+  return tune ? `Home note ${glyphs(tune.home)}` : "No key yet";
+}
+
+/** Whether the song has chords that another key would change. */
+export function hasChords({ chart }: Pick<Song, "chart">): boolean {
+  return chartChords(parseChart(chart)).length > 0;
+}
+
+/** Where a key lies from the song as it is written; without a chart there is only its tune to go by. */
+export function songMoveWords(song: Pick<Song, "chart">, semitones: number): string {
+  if (song.chart.trim() !== "") return moveWords(semitones);
+  return semitones === 0
+    ? "as you gave the tune"
+    : `${distanceWords(semitones)} ${semitones < 0 ? "under" : "over"} the tune as you gave it`;
+}
+
+/** Beat and tempo as the head of a chart says them: "4 beats, 84 a minute". */
 export function beatWords(song: Pick<Song, "beatsPerBar" | "tempo">): string | null {
   const beats = song.beatsPerBar === null ? null : `${song.beatsPerBar} ${song.beatsPerBar === 1 ? "beat" : "beats"}`;
-  const parts = [beats, song.tempo === null ? null : String(song.tempo)].filter((part) => part !== null);
+  const parts = [beats, song.tempo === null ? null : `${song.tempo} a minute`].filter((part) => part !== null);
   return parts.length === 0 ? null : parts.join(", ");
 }
 
@@ -32,7 +51,7 @@ export function headWords(song: Song, mine: string | null): string {
   const written = song.writtenKey && glyphs(keyWords(song.writtenKey));
   const key =
     written === null
-      ? "No key yet"
+      ? homeWords(song)
       : mine === null
         ? `Written in ${written}`
         : `Your key ${mine}, written in ${written}`;

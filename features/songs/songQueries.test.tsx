@@ -43,8 +43,7 @@ function Page({ id }: { id: string }) {
     </SongState>
   );
 }
-const open = (page: React.ReactNode) =>
-  render(<QueryClientProvider client={queryClient}>{page}</QueryClientProvider>);
+const open = (page: React.ReactNode) => render(<QueryClientProvider client={queryClient}>{page}</QueryClientProvider>);
 
 it("opens a song of the loaded shelf without a connection", async () => {
   const song = await shelf.put("songs", aSong({ title: "Slack Water" }));

@@ -15,6 +15,13 @@ export interface FollowingSinger {
 export async function followTones(page: Page, voice: FollowingSinger): Promise<void> {
   await page.addInitScript((limits) => {
     let voiceOf: { oscillator: OscillatorNode; loud: GainNode; context: AudioContext } | null = null;
+    const sway = [
+      [5.5, 18],
+      [1.3, 7],
+      [3.1, 5],
+      [9.7, 4],
+      [14.3, 3],
+    ] as const;
     const hz = (midi: number) => 440 * 2 ** ((midi - 69) / 12);
     const sing = (midi: number, waitS: number) => {
       if (!voiceOf) return;
@@ -36,14 +43,16 @@ export async function followTones(page: Page, voice: FollowingSinger): Promise<v
       const partials = Float32Array.from([0, 1, 0.7, 0.5, 0.35, 0.25, 0.15, 0.1]);
       const oscillator = new OscillatorNode(context, { frequency: 220 });
       oscillator.setPeriodicWave(context.createPeriodicWave(new Float32Array(partials.length), partials));
-      const vibrato = new OscillatorNode(context, { frequency: 5.5 });
-      const depth = new GainNode(context, { gain: 18 });
-      vibrato.connect(depth).connect(oscillator.detune);
+      // Vibrato, and the drift and flutter without which no throat sings, in cents.
+      for (const [frequency, gain] of sway) {
+        const wave = new OscillatorNode(context, { frequency });
+        wave.connect(new GainNode(context, { gain })).connect(oscillator.detune);
+        wave.start();
+      }
       const loud = new GainNode(context, { gain: 0 });
       const out = context.createMediaStreamDestination();
       oscillator.connect(loud).connect(out);
       oscillator.start();
-      vibrato.start();
       voiceOf = { oscillator, loud, context };
       return out.stream;
     };

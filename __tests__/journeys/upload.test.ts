@@ -98,7 +98,18 @@ describe("what cannot be used is refused with the reason", () => {
       "too-long",
       () => {
         const path = at("long.mp3");
-        const tone = ["-f", "lavfi", "-i", "sine=220:duration=605", "-ac", "1", "-b:a", "32k", "-compression_level", "9"];
+        const tone = [
+          "-f",
+          "lavfi",
+          "-i",
+          "sine=220:duration=605",
+          "-ac",
+          "1",
+          "-b:a",
+          "32k",
+          "-compression_level",
+          "9",
+        ];
         execFileSync("ffmpeg", ["-v", "error", "-y", ...tone, path]);
         return path;
       },
@@ -137,7 +148,20 @@ describe("what cannot be used is refused with the reason", () => {
 
 test("a long recording says what is being done, and can be given up", async () => {
   const path = at("ten-minutes.mp3");
-  const many = ["-stream_loop", "70", "-i", voice.wav, "-t", "590", "-ac", "1", "-b:a", "64k", "-compression_level", "9"];
+  const many = [
+    "-stream_loop",
+    "70",
+    "-i",
+    voice.wav,
+    "-t",
+    "590",
+    "-ac",
+    "1",
+    "-b:a",
+    "64k",
+    "-compression_level",
+    "9",
+  ];
   execFileSync("ffmpeg", ["-v", "error", "-y", ...many, path]);
   const { context, page } = await open("wide");
   await choose(page, path);

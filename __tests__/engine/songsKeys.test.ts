@@ -17,7 +17,8 @@ function notesOf(song: KnownSong): MelodyNote[] {
 /** The key is found from notes and chords alone; what the file states is not passed on. */
 const find = (song: KnownSong): KeyFinding =>
   findKey(song.chords === undefined ? { notes: notesOf(song) } : { chart: parseChart(song.chords) })!;
-const label = ({ tonic, mode }: KeyFinding["key"]) => tonic + (mode === "minor" ? "m" : "");
+const label = ({ tonic, mode }: KeyFinding["key"]) =>
+  tonic + (mode === "minor" ? "m" : mode === "major" ? "" : ` ${mode}`);
 
 test("at least 85 of 100 known songs get exactly their key, and the others have it as runner-up", () => {
   const wrong = knownSongs.filter((song) => label(find(song).key) !== song.key);
@@ -72,6 +73,46 @@ test("chords and tune together outweigh either: a tune that could be in two keys
   const notes = [67, 69, 71, 74, 76, 74, 71, 69].map((midi, start) => ({ start, duration: 1, midi }));
   expect(findKey({ notes, chart: parseChart("Em Am B7 Em") })!.key).toEqual({ tonic: "E", mode: "minor" });
   expect(findKey({ notes, chart: parseChart("G C D7 G") })!.key).toEqual({ tonic: "G", mode: "major" });
+});
+
+// Common practice: dorian by its major IV, mixolydian by its bVII.
+test.each([
+  ["Dm C Dm G", "D dorian", "G"],
+  ["Am D Am D", "A dorian", "D"],
+  ["Em A Em D A Em", "E dorian", "A"],
+  ["G F C G", "G mixolydian", "F"],
+  ["D C G D\nD C G D", "D mixolydian", "C"],
+  ["A♭ G♭ D♭ A♭", "Ab mixolydian", "G♭"],
+])("%s is told as %s, and why", (chords, key, mark) => {
+  const found = findKey({ chart: parseChart(chords) })!;
+  expect(label(found.key)).toBe(key);
+  expect(found.reasons.join(" ")).toContain(`; ${mark} would not belong to`);
+  expect(["major", "minor"]).toContain(found.runnerUp.mode);
+});
+
+test("a mode with one sign alone is the runner-up", () => {
+  const found = findKey({ chart: parseChart("Dm F C G") })!;
+  expect(label(found.key)).toBe("C");
+  expect(label(found.runnerUp)).toBe("D dorian");
+});
+
+test.each([
+  ["C G F C", "C"],
+  ["Am Dm E7 Am", "Am"],
+  ["Dm G7 C C", "C"],
+  ["G C D7 G", "G"],
+  ["Dm Gm A7 Dm", "Dm"],
+  ["Em C G D", "G"],
+  ["C F G C", "C"],
+])("%s stays plain %s, without any mode", (chords, key) => {
+  const found = findKey({ chart: parseChart(chords) })!;
+  expect([found.key.mode, found.runnerUp.mode].filter((mode) => mode !== "major" && mode !== "minor")).toEqual([]);
+  expect(label(found.key)).toBe(key);
+});
+
+test("two or three chords from outside are joined as one says it", () => {
+  const { reasons } = findKey({ chart: parseChart("Bb Eb F Bb Gm7b5/Bb Eb F C#dim7 Bb Bb Eb F Bb") })!;
+  expect(reasons).toContain("Outside B♭ major there are only Gm7♭5/B♭ and C♯dim7.");
 });
 
 test("little to go by gives little confidence, and nothing gives no answer", () => {

@@ -32,6 +32,14 @@ describe("a line", () => {
     ["[Am]  [F]", "chords"],
     ["G   Hm7   D", "chords"],
     ["C Bxyz9 D", "chords"],
+    ["H7  X&7 D", "chords"],
+    ["X&7     D", "chords"],
+    ["A day", "lyrics"],
+    ["A     day", "lyrics"],
+    ["Oh    Am    I", "lyrics"],
+    ["A T-shirt", "lyrics"],
+    ["Am Route 66", "lyrics"],
+    ["Dad has A B&B", "lyrics"],
     ["# remember the key change", "comment"],
     ["Capo 2", "comment"],
     ["Tempo: 84", "comment"],
@@ -97,6 +105,10 @@ describe("a chart", () => {
     expect(parseChart("Intro: G  Hm\r\n\r\nG H D").unread).toEqual([
       { line: 1, column: 11, text: "Hm" },
       { line: 3, column: 3, text: "H" },
+    ]);
+    expect(parseChart("H7  X&7 D\nlow tide").unread).toEqual([
+      { line: 1, column: 1, text: "H7" },
+      { line: 1, column: 5, text: "X&7" },
     ]);
   });
 

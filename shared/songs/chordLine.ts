@@ -21,6 +21,9 @@ const beat = /^(?:[/\\.,…~*·•↑↓>]+|[-–—=]+>?)$/;
 const noChord = /^[([]?(?:N\.C\.?|NC\.?|n\.c\.?)[)\]]?[*,]?$/;
 /** An unreadable sign that still looks meant as a chord: a note letter, then more than small letters. */
 const chordish = /^[([]?[A-H](?:[#b♯♭]|$|[^a-z\s]|[a-z]{1,4}\d|(?:m|maj|min|dim|aug|sus|add)(?![a-z]))/;
+/** No note letter, but a capital with a figure or a sign of chord symbols behind it: no word is written like that. */
+const symbolish = /^[([]?[A-Z][A-Za-z]{0,4}[\d#♯♭&+°ø∆Δ/][\w#♯♭&+°ø∆Δ/()]{0,8}[)\]]?$/;
+const meantAsChord = (text: string) => chordish.test(text) || symbolish.test(text);
 
 /**
  * Reads a line as chords, deciding by all that it holds.
@@ -33,7 +36,7 @@ export function readChordLine(line: string): ChartToken[] | null {
   const tokens = splitSigns(line);
   const counted = (kind: ChartSign) => tokens.filter((token) => token.kind === kind).length;
   const chords = tokens.filter((token) => token.kind === "chord");
-  const words = tokens.filter((token) => token.kind === "unread" && !chordish.test(token.text));
+  const words = tokens.filter((token) => token.kind === "unread" && !meantAsChord(token.text));
   if (chords.length === 0) {
     const musical = counted("bar") > 0 || counted("no-chord") > 0 || tokens.some((token) => token.text === "%");
     return musical && counted("unread") === 0 ? tokens : null;

@@ -1,8 +1,10 @@
+import type { Chord } from "../music/chord";
 import { type KeyName, keyFifths, type Mode, scaleSteps, spellTonic, tonicPitchClass } from "../music/keyName";
 import { glyphs } from "../music/pitch";
 import { type Chart, chartTokens } from "./chart";
 import { chordEvidence } from "./chordEvidence";
 import { melodyEvidence } from "./melodyEvidence";
+import { type ModalReading, modalReadings } from "./modalEvidence";
 import type { MelodyNote } from "./melody";
 
 /** What is known of a song. */
@@ -23,7 +25,7 @@ export interface RankedKey {
 export interface KeyFinding {
   key: KeyName;
   runnerUp: KeyName;
-  /** 0 to 1: how much of the belief falls on this key of all 24 */
+  /** 0 to 1: how much of the belief falls on this key of all that were weighed */
   confidence: number;
   /** score of the key minus score of the runner-up, 0 or more; below 0.05 say "could be" */
   margin: number;
@@ -39,6 +41,9 @@ const temperature = 0.05;
 const statedWorth = 0.25;
 /** With this many chords the belief is half as steep; a note tells a third of what a chord does. */
 const fewChords = 8;
+/** What each sign of a mode is worth: one alone makes it the runner-up, two put it in front, if only just. */
+const cueWorth = 0.04;
+const cuesNeeded = 1.5;
 const modes = ["major", "minor"] as const;
 
 /**
@@ -48,14 +53,12 @@ const modes = ["major", "minor"] as const;
  * @returns keys best first; empty if there is neither chord nor note
  */
 export function rankKeys(evidence: KeyEvidence): RankedKey[] {
-  const tokens = evidence.chart ? chartTokens(evidence.chart) : [];
-  const ofChords = chordEvidence(tokens.flatMap((token) => (token.chord ? [token.chord] : [])));
+  const chords = chordsOf(evidence);
+  const ofChords = chordEvidence(chords);
   const ofTune = melodyEvidence(evidence.notes ?? []);
   if (!ofChords && !ofTune) return [];
   const chordShare = !ofTune ? 1 : ofChords ? 0.55 : 0;
-  const written = new Map(
-    tokens.flatMap((token) => (token.chord ? [[tonicPitchClass(token.chord.root), token.chord.root]] : [])),
-  );
+  const written = new Map(chords.map((chord) => [tonicPitchClass(chord.root), chord.root]));
   const ranked: RankedKey[] = [];
   for (let tonic = 0; tonic < 12; tonic += 1) {
     for (const mode of modes) {
@@ -70,31 +73,46 @@ export function rankKeys(evidence: KeyEvidence): RankedKey[] {
 
 /**
  * Finds the key of a song from its chords, its tune, or both: pitch-class profiles, first and last chord or note,
- * cadences, the chords on the first, fourth and fifth step, and the tune's range.
+ * cadences, the chords on the first, fourth and fifth step, and the tune's range; dorian and mixolydian by their chords.
  *
  * @param evidence a chart, the notes of a tune, or both
- * @returns the likeliest major or minor key with the runner-up, or null if there is neither chord nor note
+ * @returns the likeliest key with the runner-up, or null if there is neither chord nor note
  * @see J. Albrecht and D. Shanahan (2013); D. Temperley, Music and Probability (2007); keyProfiles.ts
  */
 export function findKey(evidence: KeyEvidence): KeyFinding | null {
-  const [best, next, ...others] = rankKeys(evidence);
+  const chords = chordsOf(evidence);
+  const ranked = rankKeys(evidence);
+  const mode = evidence.stated ? undefined : modalReadings(chords)[0];
+  const modal = mode && ranked[0] ? rankedAs(mode, chords, ranked[0].score) : null;
+  const [best, next, ...others] = (modal ? [...ranked, modal] : ranked).sort((a, b) => b.score - a.score);
   if (!best || !next) return null;
   const margin = best.score - next.score;
-  const tokens = evidence.chart ? chartTokens(evidence.chart) : [];
-  const heard = tokens.filter((token) => token.chord).length + (evidence.notes?.length ?? 0) / 3;
+  const heard = chords.length + (evidence.notes?.length ?? 0) / 3;
   const spread = temperature * (1 + fewChords / heard);
   const beliefs = [best, next, ...others].map(({ score }) => Math.exp((score - best.score) / spread));
   const confidence = 1 / beliefs.reduce((sum, belief) => sum + belief, 0);
-  const { tonic, mode } = best.key;
-  const pc = tonicPitchClass(tonic);
-  const reasons = [
-    ...(isStated(evidence, pc, mode) ? [`It is written down as ${tonic} ${evidence.stated?.mode}.`] : []),
-    ...(chordEvidence(tokens.flatMap((token) => (token.chord ? [token.chord] : [])))?.reasons(pc, mode, best.key) ??
-      []),
-    ...(melodyEvidence(evidence.notes ?? [])?.reasons(pc, mode, best.key) ?? []),
-  ];
+  const reasons = best === modal ? mode!.reasons(best.key) : reasonsFor(evidence, chords, best.key);
   if (margin < closeMargin) reasons.push(`It could be ${next.key.tonic} ${next.key.mode}: the two are close.`);
   return { key: best.key, runnerUp: next.key, confidence, margin, reasons: [...new Set(reasons)].map(glyphs) };
+}
+
+function chordsOf({ chart }: KeyEvidence): Chord[] {
+  return chart ? chartTokens(chart).flatMap((token) => (token.chord ? [token.chord] : [])) : [];
+}
+
+/** A mode beside the best of the plain keys. */
+function rankedAs({ tonic, mode, cues }: ModalReading, chords: readonly Chord[], best: number): RankedKey {
+  const written = chords.find((chord) => tonicPitchClass(chord.root) === tonic)?.root;
+  return { key: spelled(tonic, mode, written), score: best + cueWorth * (cues - cuesNeeded) };
+}
+
+function reasonsFor(evidence: KeyEvidence, chords: readonly Chord[], key: KeyName): string[] {
+  const pc = tonicPitchClass(key.tonic);
+  return [
+    ...(isStated(evidence, pc, key.mode) ? [`It is written down as ${key.tonic} ${evidence.stated?.mode}.`] : []),
+    ...(chordEvidence(chords)?.reasons(pc, key.mode, key) ?? []),
+    ...(melodyEvidence(evidence.notes ?? [])?.reasons(pc, key.mode, key) ?? []),
+  ];
 }
 
 /** A mode counts as major or minor by its third. */
@@ -104,7 +122,7 @@ function isStated({ stated }: KeyEvidence, tonic: number, mode: Mode): boolean {
 }
 
 /** As the chart writes it where that is a key people use, else with the fewest accidentals. */
-function spelled(tonic: number, mode: "major" | "minor", written: string | undefined): KeyName {
+function spelled(tonic: number, mode: Mode, written: string | undefined): KeyName {
   if (written !== undefined && Math.abs(keyFifths({ tonic: written, mode })) <= 7) return { tonic: written, mode };
   return { tonic: spellTonic(tonic, mode), mode };
 }

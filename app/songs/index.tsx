@@ -1,12 +1,13 @@
 import { useQuery } from "@tanstack/react-query";
 import { useLocalSearchParams } from "expo-router";
 import { EnteredNotice } from "@/features/account/EnteredNotice";
-import { decidedOn } from "@/features/keys/decide";
+import { decidedElsewhere, decidedOn } from "@/features/keys/decide";
 import { decisionFor, decisionQueries } from "@/features/keys/decisionQueries";
 import { ShelfStrip } from "@/features/keys/ShelfStrip";
 import { keyInHand, keyRowsOf } from "@/features/keys/songKeys";
 import { SignedOutNotice } from "@/features/songs/SignedOut";
 import { SongShelf, type ShelfKey } from "@/features/songs/SongShelf";
+import { songMoveWords } from "@/features/songs/songFacts";
 import { songQueries } from "@/features/songs/songQueries";
 import { LinkButton } from "@/features/ui/LinkButton";
 import { QueryState } from "@/features/ui/QueryState";
@@ -14,23 +15,24 @@ import { Screen } from "@/features/ui/Screen";
 import { Skeleton } from "@/features/ui/Skeleton";
 import { useSingingVoice } from "@/features/voice/useSingingVoice";
 import type { Song } from "@/shared/contract/song";
-import { keySign } from "@/shared/music/keyWords";
-import { moveWords } from "@/shared/music/moveWords";
-import { glyphs } from "@/shared/music/pitch";
 
 export default function SongsRoute() {
   const { entered } = useLocalSearchParams<{ entered?: string }>();
   const songs = useQuery(songQueries.all());
   const decisions = useQuery(decisionQueries.all());
-  const { singing } = useSingingVoice();
+  const { forKeys: singing, voice, voices } = useSingingVoice();
   const myKey = (song: Song): ShelfKey | null => {
     const decision = decisionFor(decisions.data ?? [], song.id);
     if (!decision) return null;
     const inHand = keyInHand(song, keyRowsOf(song, singing), decision);
     if (inHand?.because !== "decided") return null;
+    if (decidedElsewhere(decision, voice?.id ?? null)) {
+      const other = voices.find(({ id }) => id === decision.voiceId)?.name ?? "another voice";
+      return { key: inHand.key, words: `Decided for ${other} since ${decidedOn(decision)}`, strip: null };
+    }
     return {
-      sign: glyphs(keySign(inHand.key)),
-      words: `My key since ${decidedOn(decision)}, ${moveWords(inHand.shift)}. ${decision.reason.replace(/\.$/, "")}`,
+      key: inHand.key,
+      words: `My key since ${decidedOn(decision)}, ${songMoveWords(song, inHand.shift)}. ${decision.reason.replace(/\.$/, "")}`,
       strip: singing && inHand.row ? <ShelfStrip row={inHand.row} singing={singing} /> : null,
     };
   };

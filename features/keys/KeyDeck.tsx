@@ -2,6 +2,7 @@ import { useEffect, useRef, type CSSProperties } from "react";
 import { View } from "react-native";
 import { SpanLadder } from "@/features/span/SpanLadder";
 import { Card } from "@/features/ui/Card";
+import { KeySign } from "@/features/ui/KeySign";
 import { Text } from "@/features/ui/Text";
 import { useLayout } from "@/features/ui/useLayout";
 import { fonts } from "@/features/ui/theme";
@@ -86,10 +87,10 @@ export function KeyDeck({ rows, voice, selected, onSelect }: KeyDeckProps) {
         >
           {Math.abs(index - at) > 2 ? (
             <Card style={{ flexGrow: 1 }}>{null}</Card>
-          ) : row === selected || roomy ? (
-            <KeyCard row={row} voice={voice} selected={row === selected} />
+          ) : row === selected ? (
+            <KeyCard row={row} voice={voice} />
           ) : (
-            <PeekCard row={row} voice={voice} side={index < at ? "right" : "left"} />
+            <PeekCard row={row} voice={voice} side={index < at ? "right" : "left"} roomy={roomy} />
           )}
         </div>
       ))}
@@ -98,17 +99,11 @@ export function KeyDeck({ rows, voice, selected, onSelect }: KeyDeckProps) {
 }
 
 /** One key in full: score, its reason, the span, and the five parts. */
-function KeyCard({ row, voice, selected }: { row: KeyRow; voice: SingingVoice; selected: boolean }) {
+function KeyCard({ row, voice }: { row: KeyRow; voice: SingingVoice }) {
   return (
-    <Card
-      selected={selected}
-      {...(selected ? { testID: "key-card" } : null)}
-      style={{ flexGrow: 1, padding: selected ? 14 : 15 }}
-    >
+    <Card selected testID="key-card" style={{ flexGrow: 1, padding: 14 }}>
       <View style={{ flexDirection: "row", justifyContent: "space-between", alignItems: "flex-end" }}>
-        <Text style={{ fontFamily: fonts.display, fontWeight: "700", fontSize: 52, lineHeight: 46, letterSpacing: -1 }}>
-          {row.sign}
-        </Text>
+        <KeySign of={row.key} size={52} />
         <Text variant="small" tone="soft">
           <Text
             tone={row.beyond ? "brick" : "lagoon"}

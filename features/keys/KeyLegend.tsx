@@ -5,7 +5,7 @@ import { Text } from "@/features/ui/Text";
 import { colors } from "@/features/ui/theme";
 
 /** What the marks in the spans mean. */
-export function KeyLegend() {
+export function KeyLegend({ children }: { children?: string }) {
   const id = useDrawingId();
   return (
     <View style={{ flexDirection: "row", flexWrap: "wrap", columnGap: 28, rowGap: 6, marginTop: 14 }}>
@@ -36,6 +36,11 @@ export function KeyLegend() {
       <Text variant="small" tone="soft" style={{ fontSize: 13 }}>
         The taller the mark, the longer the tune stays on that note.
       </Text>
+      {children !== undefined && (
+        <Text variant="small" tone="soft" style={{ fontSize: 13 }}>
+          {children}
+        </Text>
+      )}
     </View>
   );
 }

@@ -2,8 +2,9 @@ import { useState } from "react";
 import { Pressable, View } from "react-native";
 import { VoiceStrip, VoiceStripHeader } from "@/features/span/VoiceStrip";
 import { Button } from "@/features/ui/Button";
+import { KeySign } from "@/features/ui/KeySign";
 import { Text } from "@/features/ui/Text";
-import { colors, fonts } from "@/features/ui/theme";
+import { colors } from "@/features/ui/theme";
 import { webProps } from "@/features/ui/webStyle";
 import type { SingingVoice } from "@/shared/keys/keyScore";
 import { commonScale, spellingIn, type KeyRow } from "./keyRows";
@@ -15,12 +16,14 @@ export interface KeyListProps {
   voice: SingingVoice;
   selected: KeyRow;
   onSelect: (row: KeyRow) => void;
+  /** what is said of the decided key */
+  markOf: (row: KeyRow) => string | null;
 }
 
 const nextShown = 4;
 
 /** The other keys in short rows: the next four, or all twelve. A press brings a key's card to the front. */
-export function KeyList({ rows, voice, selected, onSelect }: KeyListProps) {
+export function KeyList({ rows, voice, selected, onSelect, markOf }: KeyListProps) {
   const [all, setAll] = useState(false);
   const shown = all ? rows : rows.filter((row) => row !== selected).slice(0, nextShown);
   const scale = commonScale(
@@ -65,13 +68,16 @@ export function KeyList({ rows, voice, selected, onSelect }: KeyListProps) {
                 backgroundColor: row === selected ? colors.card : "transparent",
               }}
             >
-              <Text style={{ width: 44, fontFamily: fonts.display, fontWeight: "700", fontSize: 20, lineHeight: 24 }}>
-                {row.sign}
-              </Text>
+              <View style={{ width: 44 }}>
+                <KeySign of={row.key} size={20} stacked />
+              </View>
               <View aria-hidden>
                 <VoiceStrip voice={voice} marks={row.marks} scale={scale} width={112} spelling={spellingIn(row.key)} />
               </View>
               <Text variant="tiny" tone="soft" style={{ flexGrow: 1, flexShrink: 1, flexBasis: 0 }}>
+                {markOf(row) !== null && (
+                  <Text tone="plum" style={{ fontWeight: "600" }}>{`${sentence(markOf(row) ?? "")} `}</Text>
+                )}
                 {row.reason}
               </Text>
               <Text variant="monoBold" tone={row.beyond ? "brick" : "ink"} style={{ width: 24, textAlign: "right" }}>
@@ -92,4 +98,8 @@ export function KeyList({ rows, voice, selected, onSelect }: KeyListProps) {
       />
     </View>
   );
+}
+
+function sentence(words: string): string {
+  return `${words.charAt(0).toUpperCase()}${words.slice(1)}.`;
 }

@@ -9,24 +9,21 @@ import { KeyColumn } from "./KeyColumn";
 import type { KeyRow } from "./keyRows";
 import { KeysMissing } from "./KeysMissing";
 import { partWords } from "./partWords";
-import type { SongKeys } from "./useSongKeys";
+import { ReachLine } from "./ReachLine";
+import { forWords } from "./songWords";
+import { decidedWords, type SongKeys } from "./useSongKeys";
 
 export interface KeyPaneProps {
   song: Song;
   keys: SongKeys;
-  singer: { name: string } | null;
+  singer: { id: string; name: string } | null;
   selected: KeyRow | null;
   onSelect: (shift: number) => void;
 }
 
 /** The middle column of a wide song page. */
-export function KeyPane({
-  song,
-  keys: { rows, voice, decision, saving, undo },
-  singer,
-  selected,
-  onSelect,
-}: KeyPaneProps) {
+export function KeyPane({ song, keys, singer, selected, onSelect }: KeyPaneProps) {
+  const { rows, voice, decision, noFit } = keys;
   return (
     <View testID="key-pane">
       <View
@@ -41,17 +38,29 @@ export function KeyPane({
         <Heading level={2}>Keys</Heading>
         {singer && (
           <Text variant="small" tone="soft" style={{ fontSize: 13 }}>
-            {`for ${singer.name}`}
+            {forWords(singer.name)}
           </Text>
         )}
       </View>
       {rows && voice ? (
         <>
-          <KeyColumn rows={rows} voice={voice} selected={selected} onSelect={(row) => onSelect(row.shift)} />
+          <ReachLine voice={voice} voiceId={singer?.id ?? null} />
+          {noFit !== null && (
+            <Text variant="small" testID="no-key-fits" style={{ marginBottom: 8 }}>
+              {noFit}
+            </Text>
+          )}
+          <KeyColumn
+            rows={rows}
+            voice={voice}
+            selected={selected}
+            onSelect={(row) => onSelect(row.shift)}
+            markOf={(row) => decidedWords(keys, row.shift)}
+          />
           {selected && (
             <Text variant="small" style={{ paddingTop: 8 }}>
               <Text style={{ fontWeight: "600" }}>{`What makes ${selected.score}: `}</Text>
-              {partWords(selected.parts)}
+              {partWords(selected.parts, selected)}
               {selected.coarse ? " Coarse, because only the span of the tune is known." : ""}{" "}
               <Link
                 href={{ pathname: "/songs/[id]/keys", params: { id: song.id } }}
@@ -68,7 +77,7 @@ export function KeyPane({
       )}
       {decision && (
         <View style={{ marginTop: 12 }}>
-          <DecidedLine decision={decision} saving={saving} onUndo={undo} />
+          <DecidedLine keys={keys} />
         </View>
       )}
     </View>

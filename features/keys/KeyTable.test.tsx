@@ -2,7 +2,9 @@ import { fireEvent, render, screen, within } from "@testing-library/react";
 import { useState } from "react";
 import type { Song } from "@/shared/contract/song";
 import { sortedRows, wholeVoice, type KeyOrder, type KeyRow } from "./keyRows";
-import { KeyTable, type TableWay } from "./KeyTable";
+import { KeyTable } from "./KeyTable";
+import type { TableWay } from "./KeyTableRow";
+import { tableColumns } from "./tableColumns";
 import { keyRowsOf } from "./songKeys";
 
 const song: Song = {
@@ -19,7 +21,20 @@ const song: Song = {
 const singing = { range: { lowMidi: 51, highMidi: 74 }, comfort: { lowMidi: 55, highMidi: 70 } };
 const rows = keyRowsOf(song, singing) ?? [];
 
-function Page({ wayOf = () => null }: { wayOf?: (row: KeyRow) => TableWay }) {
+const atWidth = (width: number) => {
+  window.innerWidth = width;
+  Object.defineProperty(document.documentElement, "clientWidth", { value: width, configurable: true });
+  fireEvent(window, new Event("resize"));
+};
+beforeEach(() => atWidth(1440));
+
+interface PageProps {
+  wayOf?: (row: KeyRow) => TableWay;
+  instrument?: string | null;
+  markOf?: (row: KeyRow) => string | null;
+}
+
+function Page({ wayOf = () => null, instrument = "A D F♯", markOf = () => null }: PageProps) {
   const [selected, setSelected] = useState<KeyRow | null>(rows[0] ?? null);
   const [order, setOrder] = useState<KeyOrder>("score");
   return (
@@ -31,13 +46,15 @@ function Page({ wayOf = () => null }: { wayOf?: (row: KeyRow) => TableWay }) {
       order={order}
       onOrder={setOrder}
       wayOf={wayOf}
-      instrument="A D F♯"
+      instrument={instrument}
+      markOf={markOf}
     />
   );
 }
 
 const bodyRows = () => within(screen.getByRole("table")).getAllByRole("row").slice(1);
-const signOf = (row: HTMLElement) => within(row).getByRole("rowheader").firstElementChild?.textContent;
+const signOf = (row: HTMLElement) =>
+  within(row).getByRole("rowheader").firstElementChild?.firstElementChild?.textContent;
 
 test("it is a real table: a caption, eight column heads, twelve rows with row heads", () => {
   render(<Page />);
@@ -92,4 +109,75 @@ test("a way that is still searched, one found and none are told apart", () => {
   expect(bodyRows()[0]?.textContent).toContain("Searching");
   expect(bodyRows()[1]?.textContent).toContain("Capo 5, shapes of Geasy, nothing retuned");
   expect(bodyRows()[2]?.textContent).toContain("None found");
+});
+
+test("on a narrower screen no column hides: chords stand over the best way", () => {
+  atWidth(1100);
+  render(<Page wayOf={() => ({ title: "Capo 5", cost: "easy" })} />);
+  expect(screen.getAllByRole("columnheader")).toHaveLength(7);
+  const inC = bodyRows().find((row) => signOf(row) === "C")!;
+  expect(within(inC).getAllByRole("cell").at(-1)?.textContent).toBe("CFGAmCapo 5easy");
+});
+
+test.each([700, 864, 940, 1279, 1280, 1600])("columns for %i px fit in and leave room for the pictures", (room) => {
+  for (const withWays of [true, false]) {
+    const { widths, total, span } = tableColumns(room, withWays);
+    expect(widths.reduce((sum, width) => sum + width, 0)).toBe(total);
+    expect(span).toBeGreaterThanOrEqual(180);
+    if (room >= 864) expect(total).toBeLessThanOrEqual(room);
+  }
+});
+
+test("a song without chords has no columns for them", () => {
+  render(<Page instrument={null} />);
+  expect(screen.getAllByRole("columnheader")).toHaveLength(6);
+  expect(screen.queryByText("None found")).toBeNull();
+});
+
+test("the decided key is marked, with the voice it was decided for", () => {
+  render(<Page markOf={(row) => (row.sign === "C" ? "decided for Evenings" : null)} />);
+  expect(bodyRows().filter((row) => row.textContent?.includes("Decided for Evenings"))).toHaveLength(1);
+});
+
+test("the picture is as high as its row", () => {
+  const heights = [51, 84];
+  class Observer {
+    constructor(private readonly tell: () => void) {}
+    observe(element: HTMLElement) {
+      const at = bodyRows().indexOf(element);
+      Object.defineProperty(element, "offsetHeight", { value: heights[at] ?? 51 });
+      this.tell();
+    }
+    disconnect() {}
+  }
+  const before = globalThis.ResizeObserver;
+  globalThis.ResizeObserver = Observer as unknown as typeof ResizeObserver;
+  render(<Page />);
+  const drawn = bodyRows().map((row) => within(row).getByRole("img").getAttribute("height"));
+  globalThis.ResizeObserver = before;
+  expect(drawn.slice(0, 3)).toEqual(["51", "84", "51"]);
+});
+
+test("a mode is small beside its tonic, and spoken in full", () => {
+  const modal = keyRowsOf({ ...song, writtenKey: { tonic: "G", mode: "mixolydian" } }, singing) ?? [];
+  render(
+    <KeyTable
+      rows={modal}
+      voice={wholeVoice(singing)}
+      selected={null}
+      onSelect={() => undefined}
+      order="score"
+      onOrder={() => undefined}
+      wayOf={() => null}
+      instrument={null}
+      markOf={() => null}
+    />,
+  );
+  expect(within(bodyRows()[0]!).getByText("mixo.").getAttribute("aria-hidden")).toBe("true");
+  expect(screen.getAllByRole("rowheader", { name: /mixolydian/ })).toHaveLength(12);
+});
+
+test("that it is coarse stands on the page, not in every row", () => {
+  expect(rows.every(({ coarse }) => coarse)).toBe(true);
+  expect(rows.map(({ reason, spoken }) => reason + spoken).join(" ")).not.toMatch(/span alone/);
 });

@@ -16,9 +16,12 @@ import { KeyLegend } from "./KeyLegend";
 import { KeyList } from "./KeyList";
 import { keyOrders, sortedRows, type KeyOrder, type KeyRow } from "./keyRows";
 import { KeysMissing } from "./KeysMissing";
-import { KeyTable, type TableWay } from "./KeyTable";
+import { KeyTable } from "./KeyTable";
+import type { TableWay } from "./KeyTableRow";
+import { roomWords } from "./partWords";
+import { ReachLine } from "./ReachLine";
 import { songWords } from "./songWords";
-import type { SongKeys } from "./useSongKeys";
+import { decidedHere, decidedWords, type SongKeys } from "./useSongKeys";
 
 export interface KeysScreenProps {
   song: Song;
@@ -39,7 +42,8 @@ export function KeysScreen({ song, keys, pending, voice, wayOf, instrument }: Ke
   const [order, setOrder] = useState<KeyOrder>("score");
   const { rows, decision } = keys;
   const selected = rows?.find((row) => row.shift === chosen) ?? keys.inHand?.row ?? rows?.[0] ?? null;
-  const isMine = selected !== null && decision?.shift === selected.shift;
+  const isMine = selected !== null && decidedHere(keys, selected.shift) !== null;
+  const markOf = (row: KeyRow) => decidedWords(keys, row.shift);
   const take = (row: KeyRow, done?: () => void) =>
     keys.take(
       {
@@ -64,7 +68,7 @@ export function KeysScreen({ song, keys, pending, voice, wayOf, instrument }: Ke
         small
         disabled={isMine}
         busy={keys.saving}
-        label={isMine ? `${selected.sign} is my key` : `Make ${selected.sign} my key`}
+        label={takeWords(selected, isMine)}
         onPress={() => take(selected)}
         testID="take-key"
       />
@@ -90,6 +94,12 @@ export function KeysScreen({ song, keys, pending, voice, wayOf, instrument }: Ke
         <KeysMissing song={song} />
       ) : (
         <>
+          <ReachLine voice={keys.voice} voiceId={voice?.id ?? null} />
+          {keys.noFit !== null && (
+            <Notice kind="caution" testID="no-key-fits">
+              {keys.noFit}
+            </Notice>
+          )}
           {selected.coarse && (
             <Text variant="small" tone="soft" style={{ marginBottom: 8 }}>
               Coarse: only the lowest and highest note of the tune are known, so every note between counts alike.
@@ -107,8 +117,14 @@ export function KeysScreen({ song, keys, pending, voice, wayOf, instrument }: Ke
                   onChange={setOrder}
                   testID="key-order"
                 />
-                {", played on "}
-                {instrument.chooser}.
+                {keys.written ? (
+                  <>
+                    {", played on "}
+                    {instrument.chooser}.
+                  </>
+                ) : (
+                  ". The song has no chords yet, so no ways to play it are shown."
+                )}
               </Text>
               <KeyTable
                 rows={sortedRows(rows, order)}
@@ -118,9 +134,10 @@ export function KeysScreen({ song, keys, pending, voice, wayOf, instrument }: Ke
                 order={order}
                 onOrder={setOrder}
                 wayOf={wayOf}
-                instrument={instrument.strings}
+                instrument={keys.written ? instrument.strings : null}
+                markOf={markOf}
               />
-              <KeyLegend />
+              <KeyLegend>{roomWords(selected)}</KeyLegend>
             </>
           ) : (
             <>
@@ -136,16 +153,31 @@ export function KeysScreen({ song, keys, pending, voice, wayOf, instrument }: Ke
                   style={{ marginTop: 12 }}
                 />
               )}
-              <KeyList rows={rows} voice={keys.voice} selected={selected} onSelect={(row) => setChosen(row.shift)} />
+              <Text variant="small" tone="soft" testID="room-words" style={{ marginTop: 8 }}>
+                {roomWords(selected)}
+              </Text>
+              <KeyList
+                rows={rows}
+                voice={keys.voice}
+                selected={selected}
+                onSelect={(row) => setChosen(row.shift)}
+                markOf={markOf}
+              />
             </>
           )}
           {decision && (
             <View style={{ marginTop: 12 }}>
-              <DecidedLine decision={decision} saving={keys.saving} onUndo={keys.undo} />
+              <DecidedLine keys={keys} />
             </View>
           )}
         </>
       )}
     </Screen>
   );
+}
+
+/** What the button does. A key that leaves notes out is not offered as if it fitted. */
+function takeWords({ sign, beyond }: KeyRow, isMine: boolean): string {
+  if (isMine) return `${sign} is my key`;
+  return beyond ? `Take ${sign} all the same` : `Make ${sign} my key`;
 }

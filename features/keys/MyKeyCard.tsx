@@ -3,11 +3,11 @@ import { useWindowDimensions, View, type TextStyle } from "react-native";
 import { VoiceStrip } from "@/features/span/VoiceStrip";
 import { Card } from "@/features/ui/Card";
 import { Icon } from "@/features/ui/Icon";
+import { KeySign } from "@/features/ui/KeySign";
 import { Text } from "@/features/ui/Text";
 import { colors, fonts } from "@/features/ui/theme";
 import { webStyle } from "@/features/ui/webStyle";
 import type { SingingVoice } from "@/shared/keys/keyScore";
-import { keySign } from "@/shared/music/keyWords";
 import { moveWords } from "@/shared/music/moveWords";
 import { glyphs, noteName } from "@/shared/music/pitch";
 import { commonScale, spellingIn } from "./keyRows";
@@ -20,7 +20,12 @@ export interface MyKeyCardProps {
   voice: SingingVoice | null;
 }
 
-const before = { decided: "My key", best: "Best for your voice", written: "As written" } as const;
+const before = {
+  decided: "My key",
+  best: "Best for your voice",
+  nearest: "No key holds the whole tune; this one comes nearest",
+  written: "As written",
+} as const;
 
 /** The key in hand with its span, as a way to all twelve. */
 export function MyKeyCard({ songId, inHand, voice }: MyKeyCardProps) {
@@ -45,9 +50,7 @@ export function MyKeyCard({ songId, inHand, voice }: MyKeyCardProps) {
           paddingHorizontal: 14,
         }}
       >
-        <Text style={{ fontFamily: fonts.display, fontWeight: "700", fontSize: 36, lineHeight: 40 }}>
-          {glyphs(keySign(key))}
-        </Text>
+        <KeySign of={key} size={36} stacked />
         <View style={{ flexGrow: 1, flexShrink: 1, flexBasis: 0, minWidth: 0, gap: 4 }}>
           <Text variant="small">
             <Text style={{ fontWeight: "600" }}>{before[because]}</Text>

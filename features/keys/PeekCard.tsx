@@ -3,18 +3,27 @@ import Svg, { G, Line, Rect } from "react-native-svg";
 import { Hatch, useDrawingId } from "@/features/span/Hatch";
 import { isNatural, ladderScale, yOf } from "@/features/span/ladderGeometry";
 import { Card } from "@/features/ui/Card";
+import { KeySign } from "@/features/ui/KeySign";
 import { Text } from "@/features/ui/Text";
-import { colors, fonts, mixtures } from "@/features/ui/theme";
+import { colors, mixtures } from "@/features/ui/theme";
 import type { SingingVoice } from "@/shared/keys/keyScore";
 import type { KeyRow } from "./keyRows";
 
-const width = 30;
 const step = 12;
 /** room over the top rung of the ladder on a full card, so that rungs go on from card to card */
 const pad = 8;
 
+export interface PeekCardProps {
+  row: KeyRow;
+  voice: SingingVoice;
+  side: "left" | "right";
+  /** more of it shows than an edge */
+  roomy: boolean;
+}
+
 /** A neighbour of the card in the middle: only the edge that shows, its marks at the heights they have on the full card. */
-export function PeekCard({ row, voice, side }: { row: KeyRow; voice: SingingVoice; side: "left" | "right" }) {
+export function PeekCard({ row, voice, side, roomy }: PeekCardProps) {
+  const width = roomy ? 96 : 30;
   const id = useDrawingId();
   const scale = ladderScale(voice, row.marks, 0);
   const y = (midi: number) => yOf(midi, scale, step, pad);
@@ -24,16 +33,7 @@ export function PeekCard({ row, voice, side }: { row: KeyRow; voice: SingingVoic
       style={{ flexGrow: 1, padding: 0, alignItems: side === "left" ? "flex-start" : "flex-end", overflow: "hidden" }}
     >
       <View style={{ width, alignItems: "center", paddingTop: 18, height: 120 }}>
-        <Text
-          style={{
-            fontFamily: fonts.display,
-            fontWeight: "700",
-            fontSize: row.sign.length > 2 ? 15 : 20,
-            lineHeight: 24,
-          }}
-        >
-          {row.sign}
-        </Text>
+        <KeySign of={row.key} size={row.key.mode === "minor" && row.sign.length > 2 ? 15 : 20} stacked={!roomy} />
         <Text variant="mono" tone="soft" style={{ fontSize: 12, lineHeight: 18 }}>
           {row.score}
         </Text>
@@ -52,7 +52,7 @@ export function PeekCard({ row, voice, side }: { row: KeyRow; voice: SingingVoic
           />
         ))}
         {row.marks.map((mark) => {
-          const long = Math.min(60, Math.max(8, mark.share * 400));
+          const long = Math.min(roomy ? 76 : 60, Math.max(8, mark.share * 400));
           const box = {
             x: side === "left" ? 10 : width - 10 - long,
             y: y(mark.midi) - 4,

@@ -35,6 +35,11 @@ export function stillFits(decision: Decision, written: KeyName | null): boolean 
   return tonicPitchClass(decision.tonic) === target;
 }
 
+/** Whether it was made with another voice than the one spoken of; one made without a voice holds for all. */
+export function decidedElsewhere(decision: Decision, voiceId: string | null): boolean {
+  return decision.voiceId !== null && voiceId !== null && decision.voiceId !== voiceId;
+}
+
 /** When a key was chosen, in words. */
 export function decidedOn(decision: Decision): string {
   const date = new Date(decision.decidedAt);

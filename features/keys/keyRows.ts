@@ -1,4 +1,6 @@
+import { COARSE_WORDS } from "@/shared/keys/keyReason";
 import type { SingingVoice, KeyMark, KeyParts, KeyScore } from "@/shared/keys/keyScore";
+import { noKeyFits } from "@/shared/keys/noKeyFits";
 import { keyFifths, type KeyName, tonicPitchClass } from "@/shared/music/keyName";
 import { keySign, movedKey } from "@/shared/music/keyWords";
 import { shortMove } from "@/shared/music/moveWords";
@@ -20,6 +22,7 @@ export interface KeyRow {
   moved: string;
   score: number;
   parts: KeyParts;
+  /** without the note that it is coarse, which stands once on the page */
   reason: string;
   beyond: boolean;
   coarse: boolean;
@@ -54,6 +57,7 @@ export function keyRows(
     const sign = glyphs(keySign(key));
     const span = spanWords(score, key);
     const points = Math.round(score.score);
+    const reason = score.reason.replace(` ${COARSE_WORDS}`, "");
     return {
       key,
       sign,
@@ -61,7 +65,7 @@ export function keyRows(
       moved: shortMove(score.shift),
       score: points,
       parts: score.parts,
-      reason: score.reason,
+      reason,
       beyond: score.beyond,
       coarse: score.coarse,
       below: room(score.reserves.lower, "▼"),
@@ -71,7 +75,7 @@ export function keyRows(
       span,
       marks: score.marks,
       chords: chordsIn(key).map(glyphs),
-      spoken: `${sign}, ${points} of 100. The tune runs ${span}. ${score.reason}`,
+      spoken: `${sign}, ${points} of 100. The tune runs ${span}. ${reason}`,
     };
   });
 }
@@ -109,7 +113,23 @@ export function wholeVoice(voice: SingingVoice): SingingVoice {
     lowMidi: Math.round(lowMidi),
     highMidi: Math.round(highMidi),
   });
-  return { range: band(voice.range), comfort: band(voice.comfort) };
+  return {
+    range: band(voice.range),
+    comfort: band(voice.comfort),
+    ...(voice.heard ? { heard: band(voice.heard) } : null),
+  };
+}
+
+/** What stands over the keys where none of them holds the whole tune; null where one does. */
+export function noFitWords(rows: readonly KeyRow[]): string | null {
+  const keys = rows.map(({ key, marks, coarse, beyond, above, below }) => ({
+    tonic: key.tonic,
+    marks,
+    coarse,
+    beyond,
+    reserves: { upper: above.semitones, lower: below.semitones, tessituraShift: 0 },
+  }));
+  return noKeyFits(keys, rows[0]?.key.mode);
 }
 
 /** How notes are spelled in a key. */

@@ -1,4 +1,4 @@
-import { partMaxima } from "@/shared/keys/keyParts";
+import { partMaxima, roomEnough } from "@/shared/keys/keyParts";
 import type { KeyParts } from "@/shared/keys/keyScore";
 
 /** The five parts of a score by their names, in their order. */
@@ -10,7 +10,35 @@ export const partNames: readonly { part: keyof KeyParts; name: string; inWords: 
   { part: "lowCarry", name: "Low notes carry", inWords: "for low notes" },
 ];
 
-/** "50 of 50 for time in comfort, 15 of 15 for room above, …" */
-export function partWords(parts: KeyParts): string {
-  return `${partNames.map(({ part, inWords }) => `${parts[part]} of ${partMaxima[part]} ${inWords}`).join(", ")}.`;
+/** Semitones between the tune's ends and the ends of the range. */
+interface Rooms {
+  above: { semitones: number };
+  below: { semitones: number };
+}
+
+/** "50 of 50 for time in comfort, 15 of 15 for room above (5 semitones to the top of your range), …" */
+export function partWords(parts: KeyParts, { above, below }: Rooms): string {
+  const measured: Partial<Record<keyof KeyParts, string>> = {
+    roomAbove: ` (${roomTo(above.semitones)} the top of your range)`,
+    roomBelow: ` (${roomTo(below.semitones)} its bottom)`,
+  };
+  const each = partNames.map(
+    ({ part, inWords }) => `${parts[part]} of ${partMaxima[part]} ${inWords}${measured[part] ?? ""}`,
+  );
+  return `${each.join(", ")}.`;
+}
+
+/** What the two parts for room measure, with this key's figures. */
+export function roomWords({ above, below }: Rooms): string {
+  return (
+    `Room counts to the ends of your range, not of the comfort band: ${roomTo(above.semitones)} the top, ` +
+    `${roomTo(below.semitones)} the bottom. Lying inside earns a part of the points, ` +
+    `${roomEnough.above} semitones above and ${roomEnough.below} below earn all.`
+  );
+}
+
+function roomTo(semitones: number): string {
+  const size = Math.abs(semitones);
+  const amount = `${size} ${size === 1 ? "semitone" : "semitones"}`;
+  return semitones < 0 ? `${amount} past` : `${amount} to`;
 }

@@ -6,7 +6,7 @@ import { parseChord, transposeChord } from "@/shared/music/chord";
 import { type KeyName, tonicPitchClass } from "@/shared/music/keyName";
 import { movedKey } from "@/shared/music/keyWords";
 import { chartChords, parseChart } from "@/shared/songs/chart";
-import { stillFits } from "./decide";
+import { decidedElsewhere, stillFits } from "./decide";
 import { keyRows, rowOf, type KeyRow } from "./keyRows";
 
 /** How many chords a row shows. */
@@ -47,19 +47,28 @@ export interface KeyInHand {
   /** semitones from the tune as written, octave included */
   shift: number;
   row: KeyRow | null;
-  because: "decided" | "best" | "written";
+  /** "nearest": no key holds the whole tune */
+  because: "decided" | "best" | "nearest" | "written";
 }
 
-/** The key decided for a song, else the best for the voice, else the written one; null where no key is known at all. */
-export function keyInHand(song: Song, rows: readonly KeyRow[] | null, decision: Decision | null): KeyInHand | null {
+/**
+ * The key decided for a song, else the best for the voice, else the written one; null where no key is known at all.
+ * What was decided with another voice says nothing of this one.
+ */
+export function keyInHand(
+  song: Song,
+  rows: readonly KeyRow[] | null,
+  decision: Decision | null,
+  voiceId: string | null = null,
+): KeyInHand | null {
   const written = writtenKeyOf(song);
   if (!written) return null;
-  if (decision && stillFits(decision, written)) {
+  if (decision && stillFits(decision, written) && !decidedElsewhere(decision, voiceId)) {
     const row = rows ? rowOf(rows, decision.tonic, decision.shift) : null;
     return { key: { tonic: decision.tonic, mode: written.mode }, shift: decision.shift, row, because: "decided" };
   }
   const best = rows?.[0];
-  if (best) return { key: best.key, shift: best.shift, row: best, because: "best" };
+  if (best) return { key: best.key, shift: best.shift, row: best, because: best.beyond ? "nearest" : "best" };
   return { key: written, shift: 0, row: null, because: "written" };
 }
 

@@ -20,12 +20,26 @@ export function songWords(
   const tune = song.tune && spanOf(song.tune);
   return [
     tune ? `${key}, tune ${ends(tune.low, tune.high, spelling)}` : key,
-    voice &&
-      `your voice ${voiceName === null ? "" : `${voiceName}, `}${ends(voice.range.lowMidi, voice.range.highMidi, "common")}`,
+    voice && `${voiceWords(voiceName)}, ${heardWords(voice, ends)}`,
     `strings ${instrument}`,
   ]
     .filter((part) => part !== null)
     .join(" · ");
+}
+
+/** A voice in a sentence. A name such as "My voice" is already said by "your voice". */
+export function voiceWords(name: string | null): string {
+  return name === null || /^(my|your) voice$/i.test(name.trim()) ? "your voice" : `your voice ${name.trim()}`;
+}
+
+/** Whom the keys are for: "for your voice", or "for Evenings". */
+export function forWords(name: string): string {
+  return /^(my|your)\b/i.test(name.trim()) ? `for ${name.trim().replace(/^my\b/i, "your")}` : `for ${name.trim()}`;
+}
+
+function heardWords({ range, heard }: SingingVoice, ends: (low: number, high: number, kind: Spelling) => string) {
+  const words = (band: SingingVoice["range"]) => ends(band.lowMidi, band.highMidi, "common");
+  return heard ? `sung so far ${words(heard)}, probably ${words(range)}` : words(range);
 }
 
 function spanOf(tune: NonNullable<Song["tune"]>): { low: number; high: number } {

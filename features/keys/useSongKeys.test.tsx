@@ -4,13 +4,16 @@ import { aSong, aVoice } from "@/__tests__/client/belongings";
 import { kept, refuseStorage } from "@/__tests__/client/memoryIdb";
 import { queryClient } from "@/features/api/queryClient";
 import { shelf } from "@/features/api/shelf";
-import { keyInView, useSongKeys } from "./useSongKeys";
+import { decidedHere, decidedWords, keyInView, useSongKeys } from "./useSongKeys";
 
 jest.mock("idb-keyval", () => jest.requireActual<{ memoryIdb: object }>("@/__tests__/client/memoryIdb").memoryIdb);
 
 const song = aSong({ tune: { kind: "span", lowMidi: 57, highMidi: 71, home: "D" } });
 const voice = aVoice();
+const other = aVoice({ name: "Mornings" });
 const singing = { range: { lowMidi: 51, highMidi: 74 }, comfort: { lowMidi: 55, highMidi: 70 } };
+
+const evenings = { voice, voices: [voice, other], forKeys: singing };
 
 beforeEach(async () => {
   kept.clear();
@@ -28,12 +31,13 @@ function open(singer: Parameters<typeof useSongKeys>[1]) {
 }
 
 test("a taken key is kept with why and by which voice; the next one takes its place", async () => {
-  const keys = open({ voice, singing });
+  const keys = open(evenings);
   act(() => keys.current.take({ tonic: "C", shift: -2, instrument: "guitar", way: null }));
   await waitFor(() => expect(keys.current.decision?.tonic).toBe("C"));
   const first = keys.current.decision!;
   const row = keys.current.rows?.find((each) => each.shift === -2);
-  expect(first).toMatchObject({ songId: song.id, voiceId: voice.id, score: row?.score, reason: row?.reason });
+  expect(first).toMatchObject({ songId: song.id, voiceId: voice.id, score: row?.score });
+  expect(first.reason).toBe(`${row?.reason} Judged by the span alone.`);
   act(() =>
     keys.current.take({ tonic: "Bb", shift: -4, instrument: "guitar", way: { retune: 0, capo: 3, shapeKey: "G" } }),
   );
@@ -44,7 +48,7 @@ test("a taken key is kept with why and by which voice; the next one takes its pl
 });
 
 test("undo takes the decision away, and the best key is in hand again", async () => {
-  const keys = open({ voice, singing });
+  const keys = open(evenings);
   act(() => keys.current.take({ tonic: "G", shift: 5, instrument: null, way: null }));
   await waitFor(() => expect(keys.current.inHand?.because).toBe("decided"));
   act(() => keys.current.undo());
@@ -53,7 +57,7 @@ test("undo takes the decision away, and the best key is in hand again", async ()
 });
 
 test("a key may be taken without a voice, and says that nobody judged it", async () => {
-  const keys = open({ voice: null, singing: null });
+  const keys = open({ voice: null, voices: [], forKeys: null });
   act(() => keys.current.take({ tonic: "C", shift: -2, instrument: null, way: null }));
   await waitFor(() => expect(keys.current.decision).not.toBeNull());
   expect(keys.current.decision).toMatchObject({ voiceId: null, score: null });
@@ -61,9 +65,41 @@ test("a key may be taken without a voice, and says that nobody judged it", async
 });
 
 test("a key that cannot be kept is told, and nothing is taken", async () => {
-  const keys = open({ voice, singing });
+  const keys = open(evenings);
   refuseStorage(new DOMException("full", "QuotaExceededError"));
   act(() => keys.current.take({ tonic: "C", shift: -2, instrument: null, way: null }));
   await waitFor(() => expect(keys.current.error?.message).toMatch(/no room left/));
   expect(keys.current.decision).toBeNull();
+});
+
+test("what was decided with another voice is shown as that voice's, and the best for this one is in hand", async () => {
+  const mine = open(evenings);
+  const { shift, key, sign } = mine.current.rows![3]!;
+  act(() => mine.current.take({ tonic: key.tonic, shift, instrument: null, way: null }));
+  await waitFor(() => expect(mine.current.decided).toEqual({ sign, otherVoice: null }));
+  expect(decidedWords(mine.current, shift)).toBe("my key");
+  const theirs = open({ ...evenings, voice: other });
+  await waitFor(() => expect(theirs.current.decision).not.toBeNull());
+  expect(theirs.current.decided).toEqual({ sign, otherVoice: "Maren" });
+  expect(theirs.current.inHand).toMatchObject({ because: "best", shift: theirs.current.rows?.[0]?.shift });
+  expect(decidedHere(theirs.current, shift)).toBeNull();
+  expect(decidedWords(theirs.current, shift)).toBe("decided for Maren");
+  expect(decidedWords(theirs.current, shift + 1)).toBeNull();
+  expect(keyInView(theirs.current, shift).decision).toBeNull();
+});
+
+test("a decision made without a voice holds for every voice", async () => {
+  const nobody = open({ voice: null, voices: [], forKeys: null });
+  act(() => nobody.current.take({ tonic: "G", shift: 5, instrument: null, way: null }));
+  await waitFor(() => expect(nobody.current.decision).not.toBeNull());
+  const mine = open(evenings);
+  await waitFor(() => expect(mine.current.inHand?.because).toBe("decided"));
+});
+
+test("where no key holds the tune that is said, and none is called the best", () => {
+  const narrow = { range: { lowMidi: 57, highMidi: 64 }, comfort: { lowMidi: 58, highMidi: 62 } };
+  const keys = open({ ...evenings, forKeys: narrow });
+  expect(keys.current.noFit).toMatch(/^No key holds the whole tune; /);
+  expect(keys.current.inHand?.because).toBe("nearest");
+  expect(open(evenings).current.noFit).toBeNull();
 });

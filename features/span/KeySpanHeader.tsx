@@ -3,7 +3,7 @@ import type { SingingVoice } from "@/shared/keys/keyScore";
 import { glyphs, noteName, type Spelling } from "@/shared/music/pitch";
 import { SvgLabel } from "@/features/ui/SvgLabel";
 import { colors } from "@/features/ui/theme";
-import { edges, keySpanWidth, keySpanX } from "./keySpanGeometry";
+import { edges, isNamed, keySpanWidth, keySpanX } from "./keySpanGeometry";
 import { isNatural, type Scale } from "./ladderGeometry";
 
 export interface KeySpanHeaderProps {
@@ -20,14 +20,14 @@ export function KeySpanHeader({ voice, scale, perSemitone = 14.4, spelling = "co
   const name = (midi: number) => glyphs(noteName(midi, spelling));
   const low = name(voice.comfort.lowMidi);
   const high = name(voice.comfort.highMidi);
-  const roomy = softRight - softLeft > 160;
+  const roomy = softRight - softLeft > 170;
   const naturals = Array.from({ length: scale.high - scale.low + 1 }, (_, index) => scale.low + index).filter(
     isNatural,
   );
   const reach = [
     { from: left, to: softLeft },
     { from: softRight, to: right },
-  ].filter(({ from, to }) => to - from > 34);
+  ].filter(({ from, to }) => to - from > 34 && softRight - softLeft > 90);
   return (
     <Svg
       width={width}
@@ -37,23 +37,25 @@ export function KeySpanHeader({ voice, scale, perSemitone = 14.4, spelling = "co
       aria-label={`Scale from ${name(scale.low)} to ${name(scale.high)}. Comfort band ${low} to ${high}.`}
       style={{ display: "flex" }}
     >
-      {naturals.map((midi) => {
-        const octave = midi % 12 === 0;
-        return (
-          <SvgLabel
-            key={midi}
-            x={keySpanX(midi, scale, perSemitone)}
-            y={47}
-            size={octave ? 12 : 11}
-            family="mono"
-            weight={octave ? "600" : "400"}
-            anchor="middle"
-            fill={octave ? colors.ink : colors.inkSoft}
-          >
-            {octave ? name(midi) : name(midi).charAt(0)}
-          </SvgLabel>
-        );
-      })}
+      {naturals
+        .filter((midi) => isNamed(midi, perSemitone))
+        .map((midi) => {
+          const octave = midi % 12 === 0;
+          return (
+            <SvgLabel
+              key={midi}
+              x={keySpanX(midi, scale, perSemitone)}
+              y={47}
+              size={octave ? 12 : 11}
+              family="mono"
+              weight={octave ? "600" : "400"}
+              anchor="middle"
+              fill={octave ? colors.ink : colors.inkSoft}
+            >
+              {octave ? name(midi) : name(midi).charAt(0)}
+            </SvgLabel>
+          );
+        })}
       {[softLeft, softRight].map((edge) => (
         <Line key={edge} x1={edge} x2={edge} y1={28} y2={56} stroke={colors.lagoon} strokeWidth={1.5} />
       ))}

@@ -34,3 +34,12 @@ export function seamless(height: number, pitch: number): { pitch: number; dash: 
   const period = height / Math.max(1, Math.round(height / 8));
   return { pitch: height / lines / Math.SQRT2, dash: `${(period * 5) / 8} ${(period * 3) / 8}` };
 }
+
+/** Whether a natural gets its name over the rows: all of them where there is room, then C and G, C alone, every second C. */
+export function isNamed(midi: number, perSemitone: number): boolean {
+  const pc = ((midi % 12) + 12) % 12;
+  if (perSemitone >= 9) return true;
+  if (perSemitone >= 4.5) return pc === 0 || pc === 7;
+  if (perSemitone >= 2) return pc === 0;
+  return midi % 24 === 0;
+}

@@ -136,7 +136,12 @@ export function ladderWords(
 ): string {
   const parts: string[] = [];
   if (voice) {
-    parts.push(`Voice from ${say(voice.range.lowMidi, spelling)} to ${say(voice.range.highMidi, spelling)}.`);
+    const ends = (band: SingingVoice["range"]) => `${say(band.lowMidi, spelling)} to ${say(band.highMidi, spelling)}`;
+    parts.push(
+      voice.heard
+        ? `Sung so far from ${ends(voice.heard)}, probably reaching from ${ends(voice.range)} (estimate).`
+        : `Voice from ${ends(voice.range)}.`,
+    );
     parts.push(`Comfortable from ${say(voice.comfort.lowMidi, spelling)} to ${say(voice.comfort.highMidi, spelling)}.`);
   }
   if (marks.length > 0) {

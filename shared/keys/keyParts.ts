@@ -10,10 +10,11 @@ export const partMaxima: Readonly<KeyParts> = { comfort: 50, roomAbove: 15, room
  */
 const sure: Readonly<KeyParts> = { comfort: 20, roomAbove: 6, roomBelow: 4, longHigh: 4, lowCarry: 6 };
 
-/** Room above that is as good as any more, in semitones; a reserve of 2 to 3 is the usual default. */
-const roomAboveEnough = 4;
-/** Room below that is as good as any more, in semitones; a reserve of 1 to 2 is the usual default. */
-const roomBelowEnough = 3;
+/**
+ * Room between the tune's ends and the ends of the range that is as good as any more, in semitones; reserves of 2 to 3
+ * above and 1 to 2 below are the usual defaults.
+ */
+export const roomEnough = { above: 4, below: 3 } as const;
 
 /** A voice with its edges on whole semitones, as they are named to people. */
 export interface VoiceEdges {
@@ -67,8 +68,8 @@ export function keyParts(pitches: readonly TunePitch[], edges: VoiceEdges): KeyP
   const outside = total(pitches, ({ midi, share }) => (midi < edges.rangeLow || midi > edges.rangeHigh ? share : 0));
   const losses: KeyParts = {
     comfort: capped(total(pitches, ({ midi, share }) => share * discomfort(midi, edges))),
-    roomAbove: capped((roomAboveEnough - (edges.rangeHigh - high)) / roomAboveEnough),
-    roomBelow: capped((roomBelowEnough - (low - edges.rangeLow)) / roomBelowEnough),
+    roomAbove: capped((roomEnough.above - (edges.rangeHigh - high)) / roomEnough.above),
+    roomBelow: capped((roomEnough.below - (low - edges.rangeLow)) / roomEnough.below),
     longHigh: capped(12 * total(pitches, ({ midi, heldShare }) => heldShare * ramp(midi - edges.comfortHigh + 3))),
     // At most two thirds, so that in points it stays below what the same distance above costs.
     lowCarry: (2 / 3) * capped(4.5 * total(pitches, ({ midi, share }) => share * ramp(edges.comfortLow + 3 - midi))),

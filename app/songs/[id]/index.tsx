@@ -38,7 +38,7 @@ function SongPage({ song }: { song: Song }) {
   const [looked, setLooked] = useState<number | null>(null);
   const { row, key, shift, decision } = keyInView(keys, looked);
   const search = useQuery(wayQueries.into(wide && keys.written ? { ...keys.written, instrument, wishes } : null, key));
-  const decided = keys.decision && <DecidedLine decision={keys.decision} saving={keys.saving} onUndo={keys.undo} />;
+  const decided = keys.decision && <DecidedLine keys={keys} />;
   return (
     <WayPane
       songId={song.id}

@@ -5,7 +5,7 @@ import { instrumentWords } from "@/features/instruments/myInstruments";
 import { useInstrument } from "@/features/instruments/useInstrument";
 import { DecidedLine } from "@/features/keys/DecidedLine";
 import { askedKey } from "@/features/keys/songKeys";
-import { useSongKeys } from "@/features/keys/useSongKeys";
+import { decidedHere, useSongKeys } from "@/features/keys/useSongKeys";
 import { MovedChart } from "@/features/songs/MovedChart";
 import { SongState } from "@/features/songs/SongState";
 import { songQueries } from "@/features/songs/songQueries";
@@ -34,7 +34,7 @@ function Ways({ song }: { song: Song }) {
   const keys = useSongKeys(song, useSingingVoice());
   const { key, shift } = askedKey(song, keys.inHand, asked.key, asked.shift);
   const search = useQuery(wayQueries.into(keys.written && { ...keys.written, instrument, wishes }, key));
-  const mine = keys.decision?.shift === shift ? keys.decision : null;
+  const mine = decidedHere(keys, shift);
   return (
     <WayPane
       songId={song.id}
@@ -55,7 +55,7 @@ function Ways({ song }: { song: Song }) {
           {...parts}
           chart={<MovedChart song={song} to={key} level={3} />}
           error={keys.error ?? error}
-          kept={mine && <DecidedLine decision={mine} saving={keys.saving} onUndo={keys.undo} />}
+          kept={keys.decision?.shift === shift && <DecidedLine keys={keys} />}
         />
       )}
     </WayPane>

@@ -1,0 +1,194 @@
+import { useLayoutEffect, useRef, useState, type CSSProperties, type ReactNode, type RefObject } from "react";
+import { setSigns } from "@/features/ui/textSigns";
+import { colors, fonts } from "@/features/ui/theme";
+import { keySignParts } from "@/shared/music/keyWords";
+import { glyphs } from "@/shared/music/pitch";
+import type { KeyRow, Room } from "./keyRows";
+import type { TableColumns } from "./tableColumns";
+
+/** The best way to play a key, in two short lines; undefined while it is searched, null where there is none. */
+export type TableWay = { title: string; cost: string } | null | undefined;
+
+export interface KeyTableRowProps {
+  row: KeyRow;
+  /** name of the radio group */
+  group: string;
+  on: boolean;
+  onSelect: () => void;
+  /** where the chords stand */
+  chords: TableColumns["chords"];
+  way: TableWay;
+  /** what is said of the decided key */
+  mark: string | null;
+  /** the picture, for a row of this height */
+  children: (height: number) => ReactNode;
+}
+
+const usualHeight = 51;
+
+/** One key as a row of the table. Its picture is drawn as high as the words beside it make the row. */
+export function KeyTableRow({ row, group, on, onSelect, chords, way, mark, children }: KeyTableRowProps) {
+  const line = useRef<HTMLTableRowElement>(null);
+  const height = useHeight(line);
+  const parts = keySignParts(row.key);
+  const ground = on ? colors.card : colors.paper;
+  const td: CSSProperties = { ...cell, background: ground, borderBottom: `1px solid ${colors.line}`, height: 50 };
+  const faint = row.beyond ? colors.inkSoft : colors.ink;
+  return (
+    <tr ref={line} onClick={onSelect} style={{ cursor: "pointer" }} data-testid={`key-row-${row.key.tonic}`}>
+      <td style={{ ...td, ...firstColumn, boxShadow: on ? `-12px 0 0 ${colors.card}` : undefined }}>
+        {on && (
+          <span
+            style={{
+              position: "absolute",
+              left: -12,
+              top: 0,
+              bottom: 0,
+              width: 4,
+              borderRadius: 2,
+              background: colors.plum,
+            }}
+          />
+        )}
+        <input
+          type="radio"
+          name={group}
+          checked={on}
+          onChange={onSelect}
+          aria-label={`${row.sign}, ${row.moved}`}
+          style={{ width: 18, height: 18, margin: 0, display: "block", accentColor: colors.plum }}
+        />
+      </td>
+      <th scope="row" style={{ ...td, ...secondColumn, textAlign: "left", fontWeight: 400 }}>
+        <span style={{ display: "flex", flexWrap: "wrap", alignItems: "center", columnGap: 6 }}>
+          <span style={{ font: `700 26px/1 ${fonts.display}`, minWidth: 36, color: faint }}>
+            {setSigns(glyphs(parts.large))}
+            {parts.mode !== "" && (
+              <>
+                <span aria-hidden style={{ font: `600 13px/1 ${fonts.display}`, color: colors.inkSoft }}>
+                  {` ${parts.mode}`}
+                </span>
+                <span style={unseen}>{` ${row.key.mode}`}</span>
+              </>
+            )}
+          </span>
+          <span style={{ font: `500 12px/13px ${fonts.text}`, color: colors.inkSoft, flex: "1 1 40px" }}>
+            {row.moved}
+          </span>
+        </span>
+      </th>
+      <td style={td}>
+        <div style={{ display: "grid", gridTemplateColumns: "46px 1fr", alignItems: "center" }}>
+          <span
+            data-testid="key-score"
+            style={{
+              font: `${on ? 700 : 600} ${on ? 26 : 20}px/1 ${fonts.display}`,
+              color: row.beyond ? colors.brick : on ? colors.lagoon : colors.ink,
+            }}
+          >
+            {row.score}
+          </span>
+          <span
+            style={{ font: `400 13px/16px ${fonts.text}`, color: on ? colors.ink : colors.inkSoft, paddingRight: 12 }}
+          >
+            {mark !== null && (
+              <strong style={{ display: "block", fontWeight: 600, color: colors.plum }}>
+                {`${mark.charAt(0).toUpperCase()}${mark.slice(1)}`}
+              </strong>
+            )}
+            {setSigns(row.reason.replace(/\.$/, ""))}
+          </span>
+        </div>
+      </td>
+      <td style={{ ...td, padding: 0, lineHeight: 0, position: "relative" }}>
+        <div style={{ position: "absolute", left: 0, top: 0 }}>{children(height)}</div>
+      </td>
+      <RoomCell room={row.below} style={td} strong={on} />
+      <RoomCell room={row.above} style={td} strong={on} />
+      {chords === "own" && (
+        <td style={{ ...td, paddingLeft: 8 }}>
+          <Chords names={row.chords} on={on} color={faint} />
+        </td>
+      )}
+      {chords !== "none" && (
+        <td style={chords === "own" ? td : { ...td, paddingLeft: 8 }}>
+          {chords === "folded" && <Chords names={row.chords} on={on} color={faint} />}
+          <BestWay way={way} on={on} color={faint} />
+        </td>
+      )}
+    </tr>
+  );
+}
+
+/** Height of a row, its lower rule left out; the usual one until it is measured. */
+function useHeight(line: RefObject<HTMLTableRowElement | null>): number {
+  const [height, setHeight] = useState(usualHeight);
+  useLayoutEffect(() => {
+    const element = line.current;
+    if (!element || typeof ResizeObserver === "undefined") return;
+    const observer = new ResizeObserver(() => setHeight(Math.max(usualHeight, element.offsetHeight)));
+    observer.observe(element);
+    return () => observer.disconnect();
+  }, [line]);
+  return height;
+}
+
+function Chords({ names, on, color }: { names: readonly string[]; on: boolean; color: string }) {
+  return (
+    <div
+      data-mono
+      style={{
+        display: "grid",
+        gridTemplateColumns: "repeat(4, minmax(36px, max-content))",
+        columnGap: 4,
+        font: `${on ? 600 : 400} 14px/18px ${fonts.mono}`,
+        color,
+        whiteSpace: "nowrap",
+      }}
+    >
+      {names.map((chord) => (
+        <span key={chord}>{setSigns(chord)}</span>
+      ))}
+    </div>
+  );
+}
+
+function BestWay({ way, on, color }: { way: TableWay; on: boolean; color: string }) {
+  if (way === undefined)
+    return (
+      <span style={{ display: "block", height: 12, width: 120, borderRadius: 6, background: colors.line }}>
+        <span style={unseen}>Searching</span>
+      </span>
+    );
+  if (way === null) return <span style={{ color: colors.inkSoft }}>None found</span>;
+  return (
+    <>
+      <span style={{ display: "block", font: `${on ? 600 : 500} 14px/17px ${fonts.text}`, color }}>
+        {setSigns(way.title)}
+      </span>
+      <span style={{ display: "block", font: `400 12px/15px ${fonts.text}`, color: colors.inkSoft }}>{way.cost}</span>
+    </>
+  );
+}
+
+function RoomCell({ room, style, strong }: { room: Room; style: CSSProperties; strong: boolean }) {
+  const color = { ink: colors.ink, honey: colors.honeyText, brick: colors.brick }[room.tone];
+  return (
+    <td style={{ ...style, textAlign: "center", font: `${strong ? 600 : 400} 14px/1 ${fonts.mono}`, color }}>
+      {room.text}
+    </td>
+  );
+}
+
+export const unseen: CSSProperties = {
+  position: "absolute",
+  width: 1,
+  height: 1,
+  margin: -1,
+  overflow: "hidden",
+  clipPath: "inset(50%)",
+  whiteSpace: "nowrap",
+};
+export const cell: CSSProperties = { padding: 0, boxSizing: "border-box", verticalAlign: "middle" };
+export const firstColumn: CSSProperties = { position: "sticky", left: 0, zIndex: 1 };
+export const secondColumn: CSSProperties = { position: "sticky", left: 28, zIndex: 1 };

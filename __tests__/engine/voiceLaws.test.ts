@@ -38,6 +38,60 @@ test("silence before the singing only shifts the times", () => {
   );
 });
 
+test("silence after the singing changes nothing at all", () => {
+  const clean = singPhrase(phraseFor("tenor", 2)).pcm;
+  const now = listenToTake(clean, rate);
+  for (const seconds of [0.25, 3]) {
+    const longer = new Float32Array(clean.length + seconds * rate);
+    longer.set(clean);
+    const then = listenToTake(longer, rate);
+    expect(then.notes.map((n) => n.midi.toFixed(3))).toEqual(now.notes.map((n) => n.midi.toFixed(3)));
+    expect(then.range).toEqual({ lowMidi: expect.closeTo(now.range!.lowMidi, 3), highMidi: expect.closeTo(now.range!.highMidi, 3) });
+    expect(then.f0.slice(now.f0.length).every((hz) => hz === null)).toBe(true);
+  }
+});
+
+test.each([-5, -2, 3, 7])("the same sound played %i semitones higher has its range exactly there", (semitones) => {
+  const faster = listenToTake(alto.pcm, Math.round(rate * 2 ** (semitones / 12)));
+  expect(faster.verdict).toBe("heard");
+  expect(Math.abs(faster.range!.lowMidi - report.range!.lowMidi - semitones)).toBeLessThan(0.1);
+  expect(Math.abs(faster.range!.highMidi - report.range!.highMidi - semitones)).toBeLessThan(0.1);
+});
+
+test("pauses of digital silence, into which the filters ring out, cost no note after them", () => {
+  const phrase = phraseFor("alto", 301);
+  const spaced = singPhrase({ ...phrase, consonants: 0, notes: phrase.notes.map((n, k) => (k % 4 === 3 ? { ...n, durationS: n.durationS + 0.9, gapS: 0.9 } : n)) });
+  for (const level of [1, 1e-2]) {
+    const heard = listenToTake(spaced.pcm.map((x) => level * x), rate);
+    const voiced = spaced.truth.f0.filter((hz, k) => hz !== null && spaced.truth.f0[k - 3] && spaced.truth.f0[k + 3] && heard.f0[k]);
+    const whole = spaced.truth.f0.filter((hz, k) => hz !== null && spaced.truth.f0[k - 3] && spaced.truth.f0[k + 3]);
+    expect(voiced.length / whole.length).toBeGreaterThan(0.98);
+  }
+});
+
+test("whatever the sound, every number is a number", () => {
+  const piece = fc.oneof(
+    fc.record({ kind: fc.constant("noise"), level: fc.double({ min: -200, max: 0, noNaN: true }) }),
+    fc.record({ kind: fc.constant("click"), level: fc.double({ min: -200, max: 0, noNaN: true }) }),
+    fc.record({ kind: fc.constant("tone"), level: fc.double({ min: -400, max: 0, noNaN: true }) }),
+  );
+  fc.assert(
+    fc.property(fc.array(piece, { minLength: 1, maxLength: 6 }), (pieces) => {
+      const pcm = new Float32Array(pieces.length * 4000);
+      pieces.forEach(({ kind, level }, k) => {
+        for (let i = 0; i < 4000; i++) {
+          const x = kind === "noise" ? Math.sin(i * i * 0.37) : kind === "tone" ? Math.sin(i * 0.11) : i === 2000 ? 1 : 0;
+          pcm[4000 * k + i] = 10 ** (level / 20) * x;
+        }
+      });
+      const { f0, notes, certainty, tuningCents } = listenToTake(pcm, rate);
+      const numbers = [certainty, tuningCents, ...f0.filter((hz) => hz !== null), ...notes.flatMap((n) => [n.midi, n.steadinessCents, n.levelDb])];
+      expect(numbers.filter((x) => !Number.isFinite(x))).toEqual([]);
+    }),
+    { numRuns: 12, seed: 13 },
+  );
+});
+
 test("the sample rate of the microphone does not matter: within 10 cents at 16, 44.1 and 48 kHz", () => {
   const ranges = [16000, 44100, 48000].map((sampleRate) => listenToTake(singPhrase({ ...phraseFor("bass", 4), sampleRate, consonants: 0 }).pcm, sampleRate).range!);
   for (const range of ranges) {

@@ -1,5 +1,8 @@
 import { listenToTake } from "@/shared/voice/listenToTake";
+import { addGuitar, hall } from "../sound/corpusRoom";
+import { beeps } from "../sound/corpusSounds";
 import * as sounds from "../sound/noSinging";
+import { createRandom } from "../sound/random";
 import { singPhrase } from "../sound/singer";
 import { phraseFor, singers, type SingerName } from "./voiceSingers";
 
@@ -33,6 +36,52 @@ test.each(["en", "en+f3", "de", "en+m3", "fr+f2"])("speech is not taken for sing
     const spoken = sounds.speech(line, voice);
     if (spoken === null) expect(spoken).toBeNull();
     else expect(listenToTake(spoken.pcm, spoken.sampleRate).verdict).toBe("not-singing");
+  }
+});
+
+test("nor, but for one line in ten, is it in a room with an echo", () => {
+  const spoken = ["en+f2", "de+f3", "it+f2", "es+m2", "sv+f4"].flatMap((voice) => lines.map((line) => sounds.speech(line, voice, 145)));
+  const taken = spoken.filter((s) => s !== null && listenToTake(hall(s.pcm, s.sampleRate, 0.7, 0.35, createRandom(4)), s.sampleRate).verdict === "heard");
+  expect(taken.length).toBeLessThanOrEqual(spoken.length / 10);
+});
+
+test("but singing in that room is heard, in a narrow song too", () => {
+  for (const name of Object.keys(singers) as SingerName[]) {
+    const low = singers[name].low + 4;
+    const notes = [0, 0, 2, 4, 2, 0, -1, 0, 2, 2, 4, 0].map((step, k) => ({ midi: low + step + 0.15 * Math.sin(7 * k), durationS: 0.32 + 0.1 * (k % 3) }));
+    const { pcm } = singPhrase({ notes, seed: 21, tract: singers[name].tract, scoopCents: 90, sampleRate: 16000 });
+    expect([name, listenToTake(hall(pcm, 16000, 0.7, 0.35, createRandom(5)), 16000).verdict]).toEqual([name, "heard"]);
+  }
+});
+
+test.each([1, 2, 3, 4])("beeps are no singing (%i)", (seed) => {
+  expect(["not-singing", "too-short"]).toContain(listenToTake(beeps(22050, 6, createRandom(seed)), 22050).verdict);
+});
+
+test("an electric organ's tune is stiller than any throat", () => {
+  const pcm = new Float32Array(16000 * 6);
+  let phase = 0;
+  for (let i = 0; i < pcm.length; i++) {
+    const midi = [60, 64, 67, 65, 62, 60][Math.floor(i / 16000)]!;
+    phase += (2 * Math.PI * 440 * 2 ** ((midi - 69) / 12)) / 16000;
+    pcm[i] = 0.1 * (Math.sin(phase) + 0.6 * Math.sin(2 * phase) + 0.4 * Math.sin(3 * phase) + 0.2 * Math.sin(4 * phase));
+  }
+  expect(listenToTake(pcm, 16000).verdict).toBe("not-singing");
+});
+
+test("one pitch over and over shows no range", () => {
+  const { pcm } = singPhrase({ notes: Array.from({ length: 6 }, () => ({ midi: 57, durationS: 0.6 })), seed: 2, sampleRate: 16000 });
+  expect(listenToTake(pcm, 16000).verdict).toBe("too-short");
+});
+
+test("a guitar in the rests of a song gives it no lower end", () => {
+  for (const seed of [1, 2]) {
+    const phrase = phraseFor("alto", 300 + seed);
+    const notes = phrase.notes.map((n, k) => (k === 3 || k === 8 || k === 11 ? { ...n, durationS: n.durationS + 0.9, gapS: 0.9 } : n));
+    const { pcm, truth } = singPhrase({ ...phrase, notes });
+    const { range } = listenToTake(addGuitar(pcm, 16000, -20, createRandom(seed)), 16000);
+    expect(Math.abs(range!.lowMidi - truth.lowestMidi)).toBeLessThan(1);
+    expect(Math.abs(range!.highMidi - truth.highestMidi)).toBeLessThan(1);
   }
 });
 

@@ -52,6 +52,19 @@ test("--frames adds the pitch of every hundredth of a second, null where there i
   expect(line!.f0[60]!.hz).toBeGreaterThan(140);
 });
 
+test("a hundred recordings in one call give a line each, in their order", async () => {
+  const low = singPhrase({ notes: [45, 47, 49, 52].map((midi) => ({ midi, durationS: 0.5 })), seed: 4, sampleRate: 8000, padS: 0.1 });
+  const high = singPhrase({ notes: [57, 59, 61, 64].map((midi) => ({ midi, durationS: 0.5 })), seed: 5, sampleRate: 8000, padS: 0.1 });
+  const files = Array.from({ length: 100 }, (_, k) => at(`class-${k}.wav`));
+  files.forEach((file, k) => writeWav(file, k % 10 === 9 ? new Float32Array(4000) : k % 2 ? high.pcm : low.pcm, 8000));
+  const lines = (await takeVerb.run(files)) as { file: string; verdict: string; lowMidi: number | null }[];
+  expect(lines.map(({ file }) => file)).toEqual(files);
+  lines.forEach(({ verdict, lowMidi }, k) => {
+    if (k % 10 === 9) expect([verdict, lowMidi]).toEqual(["too-quiet", null]);
+    else expect([verdict, Math.round(lowMidi!)]).toEqual(["heard", k % 2 ? 57 : 45]);
+  });
+}, 180_000);
+
 test("silence has a verdict and no numbers", async () => {
   writeWav(at("silence.wav"), new Float32Array(32000), 16000);
   expect(await takeVerb.run([at("silence.wav")])).toMatchObject([{ verdict: "too-quiet", lowMidi: null, highMidi: null, comfortLowMidi: null, certainty: 0, notes: [] }]);

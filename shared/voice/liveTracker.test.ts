@@ -37,7 +37,7 @@ test("ahead follows on the decided frames, at most twelve, and mostly turns out 
     const newest = ahead.at(-1);
     if (newest) guessed.set(Math.round(newest.t * 100), newest.hz);
   }
-  const judged = [...guessed].filter(([k, hz]) => k < decided.length && hz !== null && decided[k] != null);
+  const judged = [...guessed].filter(([k, hz]) => k < decided.length && hz !== null && (decided[k] ?? null) !== null);
   const true50Cents = judged.filter(([k, hz]) => Math.abs(1200 * Math.log2(hz! / decided[k]!)) < 50);
   expect(judged.length).toBeGreaterThan(200);
   expect(true50Cents.length / judged.length).toBeGreaterThan(0.95);

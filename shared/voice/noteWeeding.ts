@@ -7,10 +7,16 @@ const LONE_UNCLEAR_SHORT_S = 0.6;
 const SOFT_DB = 14;
 const VERY_SOFT_DB = 24;
 const UNCLEAR = 0.85;
+/**
+ * A note this far under the loud ones may be an instrument's, heard in the rests; other soft notes do not vouch for it,
+ * since an instrument's notes stand near each other. Singers' own levels differ by up to about 10 dB within a phrase.
+ */
+const BACKGROUND_DB = 12;
 
 /**
  * Marks the notes that should not count for a range although they were sustained: a lone short one more than
- * 5.5 semitones from every other, one both soft and unclear (an instrument's bleed, an echo), one very soft.
+ * 5.5 semitones from every other, one in the background that far from every note of the foreground, one both soft and
+ * unclear (an instrument's bleed, an echo), one very soft.
  *
  * @param notes in order of time; not modified
  * @returns the same notes with `clear` decided
@@ -23,9 +29,12 @@ export function weedNotes(notes: readonly HeardNote[]): HeardNote[] {
     return { ...note, clear: note.sustained && !faint };
   });
   return believed.map((note) => {
-    if (!note.clear || note.heldS >= (note.clarity < UNCLEAR ? LONE_UNCLEAR_SHORT_S : LONE_SHORT_S)) return note;
-    const others = believed.filter((other) => other.clear && other.start !== note.start);
-    const lone = others.length > 0 && others.every((other) => Math.abs(other.midi - note.midi) > LONE_DISTANCE_SEMITONES);
+    if (!note.clear) return note;
+    const background = loud - note.levelDb > BACKGROUND_DB;
+    const short = note.heldS < (note.clarity < UNCLEAR ? LONE_UNCLEAR_SHORT_S : LONE_SHORT_S);
+    if (!short && !background) return note;
+    const witnesses = believed.filter((other) => other.clear && other.start !== note.start && !(background && loud - other.levelDb > BACKGROUND_DB));
+    const lone = witnesses.length > 0 && witnesses.every((other) => Math.abs(other.midi - note.midi) > LONE_DISTANCE_SEMITONES);
     return { ...note, clear: !lone };
   });
 }

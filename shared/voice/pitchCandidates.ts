@@ -20,6 +20,11 @@ const WHOLE = 0.4;
 /** Candidates above the search limit are kept for the path to choose, so that a whistle does not pass for its octave below. */
 const DECOY_HZ = 2000;
 
+/** Below this mean level, in dBFS, no microphone hears: it is a filter's ringing in digital silence, too small to divide by. */
+const NOTHING_DB = -120;
+/** A lag at which the window overlaps with less than this share of its energy (a click in its middle) tells nothing. */
+const LEAST_OVERLAP = 0.02;
+
 /** One possible pitch of a frame. */
 export interface PitchCandidate {
   hz: number;
@@ -55,7 +60,7 @@ export function findCandidates(frame: LagFrame, room: RoomFloor, short: () => La
   const roomPower = room.m[0]!;
   const aboveRoomDb = power <= 0 ? -60 : roomPower <= 0 ? 60 : Math.max(-60, Math.min(60, 10 * Math.log10(power / roomPower)));
   const out: CandidateFrame = { candidates: [], levelDb: frame.levelDb, aboveRoomDb, mixed: false };
-  if (power <= 0) return out;
+  if (!(10 * Math.log10(power / WINDOW) > NOTHING_DB)) return out;
   const long = peaks(cleanedDifference(frame, room, WINDOW));
   const clearest = long.reduce((top, c) => Math.max(top, c.clarity), 0);
   const loudEnough = aboveRoomDb > 3 && frame.levelDb > DIGITAL_SILENCE_DB;
@@ -119,12 +124,13 @@ function cleanedDifference(frame: LagFrame, room: RoomFloor, length: number): Fl
   const n = new Float32Array(lastLag + 1);
   const { r, m } = frame;
   const { r: roomR, m: roomM } = room;
+  const least = LEAST_OVERLAP * m[0]!;
   for (let lag = 0; lag <= lastLag; lag++) {
     const both = m[lag]!;
     const share = (length - lag) / (windowLength - lag);
     const cleaned = both - share * roomM[lag]!;
     const rest = cleaned > 0.2 * both ? cleaned : 0.2 * both;
-    n[lag] = rest > 0 ? (2 * (r[lag]! - share * roomR[lag]!)) / rest : 0;
+    n[lag] = rest > least ? (2 * (r[lag]! - share * roomR[lag]!)) / rest : 0;
   }
   return n;
 }

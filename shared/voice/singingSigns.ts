@@ -22,10 +22,10 @@ export interface SingingSigns {
 }
 
 const LOUD_WITHIN_DB = 12;
-/** Voices, trained ones too, waver by more than this about a held note, vibrato removed (singers, real and made: from 2 up). */
+/** Short notes have little time to waver, so that both signs must hold. Voices, trained ones too, waver by more than this about a held note, vibrato removed (singers, real and made: from 2 up). */
 const STILL_CENTS = 1.7;
 /** A throat's pitch bends by more than this within 80 ms, through jitter alone (the same singers: from 0.7 up). */
-const FLUTTER_CENTS = 0.55;
+const FLUTTER_CENTS = 0.6;
 /** Half the stretch, in frames of 10 ms, over which flutter is looked for. */
 const FLUTTER_REACH = 4;
 /** Two notes nearer than this, in semitones, may be the same pitch sung twice. */
@@ -55,7 +55,7 @@ export function findSigns(frames: readonly TrackFrame[], notes: readonly HeardNo
     mixedShare: of((f) => f.mixed),
     pitches: countPitches(clear),
     speechLikeness: likenessToSpeech(frames, clear, top - LOUD_WITHIN_DB),
-    still: clear.length > 0 && (median(clear.map((n) => n.steadinessCents)) < STILL_CENTS || flutter(frames, clear) < FLUTTER_CENTS),
+    still: clear.length > 0 && median(clear.map((n) => n.steadinessCents)) < STILL_CENTS && flutter(frames, clear) < FLUTTER_CENTS,
     whistled: middle >= WHISTLE_FROM_MIDI && high.length > 0 && median(high) < PURE_BELOW_DB,
   };
 }

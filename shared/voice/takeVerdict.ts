@@ -9,6 +9,8 @@ const LEAST_HELD_S = 1.2;
 const LEAST_HELD_IN_HOLD_S = 0.5;
 /** A phrase of fewer pitches shows no range. */
 const LEAST_PITCHES = 3;
+/** Held as long as this on average, one or two pitches are sung, not spoken, in seconds. */
+const SUNG_LONG_S = 0.6;
 const QUIET_DB = -60;
 const FAINT_DB = -42;
 const MIXED_AT_MOST = 0.35;
@@ -40,10 +42,11 @@ export function judgeTake(evidence: Evidence): Verdict {
   const enough = hold ? signs.heldS >= LEAST_HELD_IN_HOLD_S : signs.heldS >= LEAST_HELD_S && signs.pitches >= LEAST_PITCHES;
   if (signs.still || signs.whistled) return "not-singing";
   const sung = signs.voicedShare >= VOICED_AT_LEAST && (hold || signs.speechLikeness < 0);
+  const monotone = signs.pitches < LEAST_PITCHES && signs.voicedShare >= VOICED_AT_LEAST && signs.heldS >= SUNG_LONG_S * notes.filter((n) => n.clear).length;
   if (enough && signs.mixedShare > MIXED_AT_MOST) return "several-voices";
   if (enough && sung) return "heard";
   if (evidence.clipped > CLIPPED_BEYOND_USE) return "clipped";
-  if (durationS < 2 || (!enough && signs.heldS > 0 && sung)) return "too-short";
+  if (durationS < 2 || (!enough && signs.heldS > 0 && (sung || monotone))) return "too-short";
   if (room.levelDb === null && loudest < FAINT_DB) return "too-quiet";
   if (isNoise(frames, room)) return "too-noisy";
   return signs.mixedShare > MIXED_AT_MOST ? "several-voices" : "not-singing";

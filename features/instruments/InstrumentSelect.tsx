@@ -1,6 +1,6 @@
 import { Select } from "@/features/ui/Select";
 import type { OwnInstrument } from "@/shared/contract/instrument";
-import { offeredInstruments } from "./myInstruments";
+import { offeredInstruments, ownWords } from "./myInstruments";
 
 export interface InstrumentSelectProps {
   owned: readonly OwnInstrument[];
@@ -20,9 +20,7 @@ export function InstrumentSelect({ owned, value, onChange, inline = false }: Ins
       value={value}
       options={offeredInstruments(owned).map(({ instrument, own }) => ({
         value: instrument.id,
-        label: own?.favourite
-          ? `my ${instrument.name.charAt(0).toLowerCase()}${instrument.name.slice(1)}`
-          : instrument.name,
+        label: ownWords(instrument, own),
       }))}
       onChange={onChange}
     />

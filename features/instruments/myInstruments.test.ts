@@ -6,6 +6,7 @@ import {
   makeFavourite,
   offeredInstruments,
   ownedAs,
+  ownWords,
   stringWords,
   turnHand,
 } from "./myInstruments";
@@ -50,6 +51,14 @@ test("an own instrument stands in its preset's place, once", () => {
   const offered = offeredInstruments([left]);
   expect(offered).toHaveLength(presets.length);
   expect(offered.find(({ instrument }) => instrument.id === "guitar")?.instrument.leftHanded).toBe(true);
+});
+
+test("the favourite preset is mine in words, a name of one's own stands as it is", () => {
+  const [box] = makeFavourite([], "box-gdg", newId);
+  expect(ownWords(instrumentOf(box!), box!)).toBe("my box guitar, G-D-G");
+  const named = { ...box!, name: "The cigar box" };
+  expect(ownWords(instrumentOf(named), named)).toBe("The cigar box");
+  expect(ownWords(chosenInstrument([], "guitar"), null)).toBe("Guitar");
 });
 
 test("an instrument of no preset is offered last", () => {

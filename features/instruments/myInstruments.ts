@@ -73,6 +73,13 @@ export function ownedAs(owned: readonly OwnInstrument[], id: string, newId: () =
   };
 }
 
+/** An instrument in a list to choose from: the favourite preset is "my guitar", a name of one's own stands as it is. */
+export function ownWords(instrument: Instrument, own: OwnInstrument | null): string {
+  const { name } = instrument;
+  const isPreset = presets.some((preset) => preset.id === own?.presetId && preset.name === name);
+  return own?.favourite && isPreset ? `my ${name.charAt(0).toLowerCase()}${name.slice(1)}` : name;
+}
+
 /** Name and tuning: names that hold the tuning say it once. */
 export function instrumentWords(instrument: Instrument): string {
   return instrument.name.includes(",") ? instrument.name : `${instrument.name}, ${stringWords(instrument)}`;

@@ -1,30 +1,39 @@
 import { useQuery } from "@tanstack/react-query";
-import { useState } from "react";
 import { newId } from "@/features/api/newId";
 import type { OwnInstrument } from "@/shared/contract/instrument";
 import type { Instrument } from "@/shared/instruments/instrument";
 import { instrumentQueries, useSaveInstruments } from "./instrumentQueries";
 import { chosenInstrument, makeFavourite } from "./myInstruments";
+import { tryInstrument, useTrial } from "./trialInstrument";
 
-/** The instrument in hand. Choosing another makes it the favourite, so that every page speaks of it from then on. */
-export function useInstrument(): {
+/**
+ * The instrument in hand at one song: the one tried with it, else the one its key was decided on, else the favourite.
+ * Trying one changes nothing that is kept.
+ */
+export function useInstrument(
+  songId: string,
+  decided: string | null,
+): {
   instrument: Instrument;
   owned: readonly OwnInstrument[];
   choose: (id: string) => void;
+  /** Somebody who has not said yet what they play plays what they take a way on. */
+  settle: () => void;
   error: Error | null;
 } {
   const query = useQuery(instrumentQueries.all());
   const save = useSaveInstruments();
-  const [chosen, setChosen] = useState<string | null>(null);
+  const tried = useTrial(songId);
   const owned = query.data ?? [];
+  const instrument = chosenInstrument(owned, tried ?? decided);
   return {
-    instrument: chosenInstrument(owned, chosen),
+    instrument,
     owned,
     error: save.error,
-    choose: (id) => {
-      setChosen(id);
-      const changed = makeFavourite(owned, id, newId);
-      if (changed.length > 0) save.mutate(changed);
+    choose: (id) => tryInstrument(songId, id),
+    settle: () => {
+      if (query.data && !owned.some(({ favourite }) => favourite))
+        save.mutate(makeFavourite(owned, instrument.id, newId));
     },
   };
 }

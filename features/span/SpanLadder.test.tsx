@@ -1,8 +1,8 @@
 import { fireEvent, render, screen } from "@testing-library/react";
 import type { KeyMark, SingingVoice } from "@/shared/keys/keyScore";
 import { KeySpan } from "./KeySpan";
-import { keySpanWidth, keySpanX, markHeight, seamless } from "./keySpanGeometry";
-import { zoneOf } from "./ladderGeometry";
+import { isNamed, keySpanWidth, keySpanX, markHeight, seamless } from "./keySpanGeometry";
+import { isNatural, zoneOf } from "./ladderGeometry";
 import { shiftForDrag, shiftForKey, shiftWords } from "./ShiftHandle";
 import { SpanLadder } from "./SpanLadder";
 import { stripX, VoiceStrip } from "./VoiceStrip";
@@ -118,6 +118,17 @@ describe("KeySpan", () => {
     const lines = height / (seamless(height, 7).pitch * Math.SQRT2);
     expect(Math.abs(lines - Math.round(lines))).toBeLessThan(1e-9);
   });
+
+  it.each([14.4, 9, 8, 5, 3, 1.5])(
+    "names no two notes closer than their letters at %f px a semitone",
+    (perSemitone) => {
+      const naturals = Array.from({ length: 85 }, (_, k) => 24 + k).filter(isNatural);
+      const named = naturals.filter((midi) => isNamed(midi, perSemitone));
+      expect(named.length).toBeGreaterThan(1);
+      const gaps = named.slice(1).map((midi, k) => (midi - named[k]!) * perSemitone);
+      expect(Math.min(...gaps)).toBeGreaterThanOrEqual(9);
+    },
+  );
 
   it("names both ends, and marks the one beyond with a triangle", () => {
     const { container } = render(

@@ -81,6 +81,12 @@ describe("ladderWords", () => {
     );
   });
 
+  it("tells what was heard apart from what is probable", () => {
+    expect(ladderWords({ ...voice, heard: { lowMidi: 55, highMidi: 70 } }, [])).toBe(
+      "Sung so far from G3 to B♭4, probably reaching from F3 to C5 (estimate). Comfortable from G3 to A4.",
+    );
+  });
+
   it("has nothing to say of nothing", () => {
     expect(ladderWords(null, [])).toBe("");
   });

@@ -1,7 +1,7 @@
 import { render, screen } from "@testing-library/react";
 import type { Shape } from "@/shared/ways/way";
 import { ChordGrid } from "./ChordGrid";
-import { cardMeasure, fretY, gridWindow, pieceMeasure, stringX } from "./chordGridGeometry";
+import { cardMeasure, fretY, gridWindow, nameLines, pieceMeasure, spokenGrid, stringX } from "./chordGridGeometry";
 
 function shape(frets: (number | null)[], fingers: number[], roots: number[], barre: Shape["barre"] = null): Shape {
   return { frets, fingers, roots, barre, reachMm: 0, ease: 1 };
@@ -85,4 +85,48 @@ describe("ChordGrid", () => {
     expect(Array.from(container.querySelectorAll("text")).map((text) => text.textContent)).toContain("3");
     expect(container.querySelector('line[stroke-width="3"]')).toBeNull();
   });
+});
+
+describe("the name over a grid", () => {
+  it.each([
+    ["C", ["C"]],
+    ["F♯m7♭5", ["F♯m7♭5"]],
+    ["C/B♭", ["C/B♭"]],
+    ["B♭m(maj7)/A♭", ["B♭m(maj7)", "/A♭"]],
+    ["C♯maj7(♯11)/G♯", ["C♯maj7", "(♯11)/G♯"]],
+  ])("%s breaks only before a slash or a bracket", (name, lines) => {
+    expect(nameLines(name)).toEqual(lines);
+  });
+
+  it("keeps the room that its neighbours need", () => {
+    const { container } = render(
+      <ChordGrid name="C" shape={shape([0, 0, 0], [0, 0, 0], [0])} strings={3} nameHeight={2} />,
+    );
+    expect(container.querySelector('[style*="min-height: 36px"]')?.textContent).toBe("C");
+  });
+});
+
+describe("strings in words", () => {
+  const open = shape([0, 0, 0], [0, 0, 0], []);
+  const spoken = (stringNames: string[]) => spokenGrid({ name: "G", shape: open, capo: 0, stringNames });
+
+  it.each([
+    [["G2", "D3", "G3"], "G: low G string open; D string open; high G string open"],
+    [["G4", "D3", "G3"], "G: high G string open; D string open; low G string open"],
+    [["D3", "D3", "A3"], "G: first string, D, open; second string, D, open; A string open"],
+    [["D2", "D3", "D4"], "G: first string, D, open; second string, D, open; third string, D, open"],
+    [["A3", "D4", "F♯4"], "G: A string open; D string open; F♯ string open"],
+  ])("%j are told apart", (names, words) => {
+    expect(spoken(names)).toBe(words);
+  });
+});
+
+it("calls the frets of a diatonic fretboard as its players do, in picture and words", () => {
+  const fretNames = ["0", "1", "2", "3", "4", "5", "6", "6½", "7"];
+  const { container } = render(
+    <ChordGrid name="E" shape={shape([7, 8, 7], [1, 2, 1], [0])} strings={3} fretNames={fretNames} />,
+  );
+  expect(screen.getByRole("img").getAttribute("aria-label")).toMatch(/fret 6½, finger 1.*fret 7, finger 2/);
+  const labels = Array.from(container.querySelectorAll("text")).map((text) => text.textContent);
+  expect(labels).toEqual(expect.arrayContaining(["6½", "7"]));
 });

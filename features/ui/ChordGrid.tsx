@@ -6,6 +6,7 @@ import {
   cardMeasure,
   fretY,
   gridWindow,
+  nameLines,
   pieceMeasure,
   spokenGrid,
   stringX,
@@ -15,6 +16,7 @@ import { SvgLabel } from "./SvgLabel";
 import { Text } from "./Text";
 import { colors } from "./theme";
 import { useLayout } from "./useLayout";
+import { webStyle } from "./webStyle";
 
 export interface ChordGridProps {
   /** name of the shape, ASCII or glyphs */
@@ -29,6 +31,10 @@ export interface ChordGridProps {
   leftHanded?: boolean;
   /** note names of the strings in playing order, for the words */
   stringNames?: readonly string[] | undefined;
+  /** what the frets are called, from the open string on, where that is not their number */
+  fretNames?: readonly string[] | undefined;
+  /** lines kept for the name, so that neighbours begin at one height; as many as it takes unless told otherwise */
+  nameHeight?: number;
   /** px; by the layout unless told otherwise */
   measure?: GridMeasure;
   testID?: string;
@@ -71,6 +77,8 @@ export function ChordGrid({
   sounds,
   leftHanded = false,
   stringNames,
+  fretNames,
+  nameHeight,
   measure,
   testID,
 }: ChordGridProps) {
@@ -87,19 +95,33 @@ export function ChordGrid({
   const indices = Array.from({ length: strings }, (_, index) => index);
   const x = (index: number) => stringX(index, strings, size, leftHanded);
   const { barre } = shape;
+  const lines = nameLines(glyphs(name));
+  const named = fretNames ? Array.from({ length: window.rows }, (_, row) => window.first + row) : [];
   const words = spokenGrid({
     name: glyphs(name),
     shape,
     capo,
     sounds: sounds === undefined ? undefined : glyphs(sounds),
     stringNames: stringNames?.map(glyphs),
+    fretNames,
   });
 
   return (
     <View testID={testID} style={{ alignItems: "center", flexShrink: 0 }}>
-      <Text variant="monoBold" aria-hidden style={{ fontSize: 14, lineHeight: 18, paddingLeft: 10 }}>
-        {glyphs(name)}
-      </Text>
+      <View
+        aria-hidden
+        style={{ minHeight: 18 * Math.max(lines.length, nameHeight ?? 0), justifyContent: "flex-end", paddingLeft: 10 }}
+      >
+        {lines.map((line) => (
+          <Text
+            key={line}
+            variant="monoBold"
+            style={[{ fontSize: 14, lineHeight: 18, textAlign: "center" }, webStyle({ whiteSpace: "nowrap" })]}
+          >
+            {line}
+          </Text>
+        ))}
+      </View>
       <Svg
         width={right + 10}
         height={bottom + 3}
@@ -165,7 +187,21 @@ export function ChordGrid({
             />
           )
         )}
-        {upTheNeck && (
+        {named.map((fret) => (
+          <SvgLabel
+            key={fret}
+            x={12}
+            y={fretY(fret, window, top, size) + 4}
+            size={fret === window.first ? 12 : 11}
+            family="display"
+            weight="600"
+            anchor="end"
+            fill={colors.inkSoft}
+          >
+            {fretNames?.[fret] ?? ""}
+          </SvgLabel>
+        ))}
+        {upTheNeck && !fretNames && (
           <SvgLabel
             x={10}
             y={fretY(window.first, window, top, size) + 4}
@@ -237,7 +273,7 @@ export function ChordGrid({
         })}
       </Svg>
       {sounds !== undefined && (
-        <Text variant="tiny" tone="soft" aria-hidden style={{ paddingLeft: 10, marginTop: 3 }}>
+        <Text variant="tiny" tone="soft" aria-hidden style={{ paddingLeft: 10, marginTop: 3, textAlign: "center" }}>
           {`sounds ${glyphs(sounds)}`}
         </Text>
       )}

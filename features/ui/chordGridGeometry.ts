@@ -37,33 +37,65 @@ export function fretY(fret: number, window: GridWindow, top: number, measure: Gr
   return top + (fret - window.first + 0.5) * measure.fret;
 }
 
+/** Width of a grid's drawing. */
+export function gridWidth(strings: number, measure: GridMeasure = pieceMeasure): number {
+  return 30 + (strings - 1) * measure.string;
+}
+
+/** Signs of a chord's name that stand in one line over a grid. */
+const lineLength = 9;
+
+/** A chord's name in the lines that it takes: it breaks before "/" and "(" only, and only where it is too long. */
+export function nameLines(name: string): string[] {
+  const lines: string[] = [];
+  for (const part of name.split(/(?=[/(])/)) {
+    const last = lines[lines.length - 1];
+    if (last !== undefined && last.length + part.length <= lineLength) lines[lines.length - 1] = last + part;
+    else lines.push(part);
+  }
+  return lines;
+}
+
 export interface SpokenGrid {
   name: string;
   shape: Shape;
   capo: number;
   sounds?: string | undefined;
-  /** note names of the strings, in playing order */
+  /** note names of the strings with their octaves, in playing order */
   stringNames?: readonly string[] | undefined;
+  /** what the frets are called, from the open string on; their numbers unless told otherwise */
+  fretNames?: readonly string[] | undefined;
 }
 
 const ordinals = ["first", "second", "third", "fourth", "fifth", "sixth", "seventh", "eighth"];
 
+/** A string by its note; two of one note are told apart as low and high, more of them by their places. */
 function stringWords(index: number, names: readonly string[] | undefined): string {
   const name = names?.[index];
-  return name === undefined ? `${ordinals[index] ?? String(index + 1)} string` : `${name.replace(/-?\d+$/, "")} string`;
+  const place = ordinals[index] ?? String(index + 1);
+  if (!names || name === undefined) return `${place} string`;
+  const letter = (full: string) => full.replace(/-?\d+$/, "");
+  const alike = names.filter((other) => letter(other) === letter(name));
+  if (alike.length === 1) return `${letter(name)} string`;
+  const octaves = alike.map((other) => Number(/-?\d+$/.exec(other)?.[0] ?? NaN));
+  const own = Number(/-?\d+$/.exec(name)?.[0] ?? NaN);
+  if (alike.length === 2 && octaves.every(Number.isFinite) && octaves[0] !== octaves[1])
+    return `${own === Math.min(...octaves) ? "low" : "high"} ${letter(name)} string`;
+  return `${place} string, ${letter(name)},`;
 }
 
 /** The whole grid in words, string by string from the bass side. */
-export function spokenGrid({ name, shape, capo, sounds, stringNames }: SpokenGrid): string {
+export function spokenGrid({ name, shape, capo, sounds, stringNames, fretNames }: SpokenGrid): string {
+  const called = (fret: number) => fretNames?.[fret] ?? String(fret);
   const strings = shape.frets.map((fret, index) => {
     const words = stringWords(index, stringNames);
     if (fret === null) return `${words} silent`;
     if (fret === 0) return `${words} open`;
     const finger = shape.fingers[index] ?? 0;
-    return `${words} fret ${fret}${finger > 0 ? `, finger ${finger}` : ""}`;
+    return `${words} fret ${called(fret)}${finger > 0 ? `, finger ${finger}` : ""}`;
   });
   const parts = [...strings];
-  if (shape.barre) parts.push(`barre at fret ${shape.barre.fret}`);
+  if (shape.barre) parts.push(`barre at fret ${called(shape.barre.fret)}`);
   if (capo > 0) parts.push(`capo at fret ${capo}, frets counted from it`);
   if (sounds !== undefined) parts.push(`sounds ${sounds}`);
   return `${name}: ${parts.join("; ")}`;

@@ -23,11 +23,11 @@ const way = (retune: number, capo: number, shapeKey: string): Way => ({
 });
 
 test.each([
-  [way(0, 0, "C"), "Use it as tuned", "As tuned, shapes of C"],
-  [way(0, 3, "A"), "Use capo 3", "Capo 3, shapes of A"],
-  [way(-2, 0, "D"), "Use this tuning", "Retuned 2 down, shapes of D"],
-  [way(-1, 1, "Bb"), "Use this tuning and capo 1", "Retuned 1 down, capo 1, shapes of B♭"],
-  [way(1, 0, "F#"), "Use this tuning", "Retuned 1 up, shapes of F♯"],
+  [way(0, 0, "C"), "Use it as tuned", "As tuned, shapes in C"],
+  [way(0, 3, "A"), "Use capo 3", "Capo 3, shapes in A"],
+  [way(-2, 0, "D"), "Use this tuning", "Retuned 2 down, shapes in D"],
+  [way(-1, 1, "Bb"), "Use this tuning and capo 1", "Retuned 1 down, capo 1, shapes in B♭"],
+  [way(1, 0, "F#"), "Use this tuning", "Retuned 1 up, shapes in F♯"],
 ])("%# has its words", (each, label, short) => {
   expect([takeLabel(each), shortWay(each)]).toEqual([label, short]);
 });
@@ -41,8 +41,12 @@ test("beside no key's name the button says the key too", () => {
 test("the cost says how hard it is and what is retuned", () => {
   expect(shortCost(way(0, 3, "A"))).toBe("easy, nothing retuned");
   expect(shortCost({ ...way(-2, 0, "D"), difficulty: 0.5 })).toBe("some work, 3 strings retuned");
+  const shape = { frets: [0], fingers: [0], barre: null, reachMm: 0, ease: 1, roots: [0] };
   const chord = { sounding: "C", written: "D", played: "A", shape: null };
-  expect(shortCost({ ...way(0, 0, "C"), chords: [chord, chord] })).toBe("no shape for 2 of 2 chords");
+  expect(shortCost({ ...way(0, 0, "C"), chords: [chord, { ...chord, played: "N.C." }, { ...chord, shape }] })).toBe(
+    "1 of 2 chords has no shape here",
+  );
+  expect(shortCost({ ...way(0, 0, "C"), chords: [chord, chord] })).toBe("none of the chords has a shape here");
 });
 
 test("difficulty has three words", () => {

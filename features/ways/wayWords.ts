@@ -1,4 +1,5 @@
 import { glyphs } from "@/shared/music/pitch";
+import { missingWords } from "@/shared/ways/missingShapes";
 import type { Way } from "@/shared/ways/way";
 
 type Moves = Pick<Way, "kind" | "retune" | "capo" | "shapeKey">;
@@ -17,7 +18,7 @@ export function takeLabelIn(sign: string, { retune, capo }: Moves): string {
 
 /** A way in the few words that a table row has room for. */
 export function shortWay({ retune, capo, shapeKey }: Moves): string {
-  const shapes = `shapes of ${glyphs(shapeKey)}`;
+  const shapes = `shapes in ${glyphs(shapeKey)}`;
   const retuned = `${Math.abs(retune)} ${retune < 0 ? "down" : "up"}`;
   if (retune === 0) return capo === 0 ? `As tuned, ${shapes}` : `Capo ${capo}, ${shapes}`;
   return capo === 0 ? `Retuned ${retuned}, ${shapes}` : `Retuned ${retuned}, capo ${capo}, ${shapes}`;
@@ -31,8 +32,8 @@ export function difficultyWord(difficulty: number): string {
 
 /** What a way asks for, beneath its short form. */
 export function shortCost(way: Pick<Way, "difficulty" | "retune" | "strings" | "chords">): string {
-  const missing = way.chords.filter((chord) => chord.shape === null).length;
-  if (missing > 0) return `no shape for ${missing} of ${way.chords.length} chords`;
+  const missing = missingWords(way.chords);
+  if (missing !== null) return missing;
   const changed = way.strings.filter((string) => string.from !== string.to).length;
   const retuned = changed === 0 ? "nothing retuned" : `${changed} ${changed === 1 ? "string" : "strings"} retuned`;
   return `${difficultyWord(way.difficulty)}, ${retuned}`;

@@ -31,10 +31,10 @@ function SongPage({ song }: { song: Song }) {
   const router = useRouter();
   const remove = useRemoveSong();
   const singer = useSingingVoice();
-  const { instrument } = useInstrument();
   const [wishes] = useWishes();
   const wide = useLayout() === "wide";
   const keys = useSongKeys(song, singer);
+  const { instrument, settle } = useInstrument(song.id, keys.decision?.instrument ?? null);
   const [looked, setLooked] = useState<number | null>(null);
   const { row, key, shift, decision } = keyInView(keys, looked);
   const search = useQuery(wayQueries.into(wide && keys.written ? { ...keys.written, instrument, wishes } : null, key));
@@ -49,7 +49,7 @@ function SongPage({ song }: { song: Song }) {
       instrument={instrument}
       kept={decision?.instrument === instrument.id ? decision.way : null}
       saving={keys.saving}
-      onUse={(way) => key && keys.take({ tonic: key.tonic, shift, instrument: instrument.id, way })}
+      onUse={(way) => key && keys.take({ tonic: key.tonic, shift, instrument: instrument.id, way }, settle)}
       most={3}
     >
       {({ list, use }) => (

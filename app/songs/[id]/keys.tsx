@@ -25,9 +25,9 @@ export default function KeysRoute() {
 
 function Keys({ song }: { song: Song }) {
   const singer = useSingingVoice();
-  const { instrument, owned, choose } = useInstrument();
   const [wishes] = useWishes();
   const keys = useSongKeys(song, singer);
+  const { instrument, owned, choose } = useInstrument(song.id, keys.decision?.instrument ?? null);
   const wide = useLayout() === "wide";
   const rows = keys.rows ?? [];
   // Only the table shows a way in every row; the phone asks for the ways of one key, on their own page.

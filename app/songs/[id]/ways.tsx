@@ -29,9 +29,9 @@ export default function WaysRoute() {
 
 function Ways({ song }: { song: Song }) {
   const asked = useLocalSearchParams<{ key?: string; shift?: string }>();
-  const { instrument, owned, choose, error } = useInstrument();
   const [wishes] = useWishes();
   const keys = useSongKeys(song, useSingingVoice());
+  const { instrument, owned, choose, settle, error } = useInstrument(song.id, keys.decision?.instrument ?? null);
   const { key, shift } = askedKey(song, keys.inHand, asked.key, asked.shift);
   const search = useQuery(wayQueries.into(keys.written && { ...keys.written, instrument, wishes }, key));
   const mine = decidedHere(keys, shift);
@@ -44,7 +44,7 @@ function Ways({ song }: { song: Song }) {
       instrument={instrument}
       kept={mine?.instrument === instrument.id ? mine.way : null}
       saving={keys.saving}
-      onUse={(way) => keys.take({ tonic: key.tonic, shift, instrument: instrument.id, way })}
+      onUse={(way) => keys.take({ tonic: key.tonic, shift, instrument: instrument.id, way }, settle)}
     >
       {(parts) => (
         <WaysScreen

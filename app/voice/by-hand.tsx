@@ -1,5 +1,5 @@
 import { useLocalSearchParams, useRouter } from "expo-router";
-import { ByHandScreen } from "@/features/voice/ByHandScreen";
+import { ByHandScreen } from "@/features/voice/byHand/ByHandScreen";
 
 export default function ByHandRoute() {
   const { voice } = useLocalSearchParams<{ voice?: string }>();

@@ -1,4 +1,4 @@
-import { VoiceScreen } from "@/features/voice/VoiceScreen";
+import { VoiceScreen } from "@/features/voice/profile/VoiceScreen";
 
 export default function VoiceRoute() {
   return <VoiceScreen />;

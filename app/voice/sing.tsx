@@ -1,5 +1,5 @@
 import { useRouter } from "expo-router";
-import { SingScreen } from "@/features/voice/SingScreen";
+import { SingScreen } from "@/features/voice/sing/SingScreen";
 
 export default function SingRoute() {
   const router = useRouter();

@@ -1,4 +1,4 @@
-import { failureWords } from "./failureWords";
+import { failureWords } from "./sing/failureWords";
 import { bandWords } from "./noteWords";
 import type { RecorderState } from "./recorder/recorder";
 import { inTune } from "./takeOfHeard";

@@ -10,7 +10,7 @@ import { Notice } from "@/features/ui/Notice";
 import { Screen } from "@/features/ui/Screen";
 import { Text } from "@/features/ui/Text";
 import type { Voice } from "@/shared/contract/voice";
-import { KeepTake } from "../KeepTake";
+import { KeepTake } from "../sing/KeepTake";
 import { noteWord, whenWords } from "../noteWords";
 import { useSingingVoice } from "../useSingingVoice";
 import { newVoice, useKeepHolds, voiceQueries } from "../voiceQueries";

@@ -1,5 +1,5 @@
 import type { FailureKind } from "../recorder/recorder";
-import { failureWords } from "../failureWords";
+import { failureWords } from "../sing/failureWords";
 import { noteWord } from "../noteWords";
 import type { TryOutcome } from "./guidedHold";
 import { farthest, type GuidedEnd, type GuidedRun, type GuidedState } from "./guidedSteps";

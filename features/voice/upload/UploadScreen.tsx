@@ -1,10 +1,10 @@
 import { useState } from "react";
 import { LiveText } from "@/features/ui/LiveText";
-import { HeardResult, type KeptNext } from "../HeardResult";
+import { HeardResult, type KeptNext } from "../sing/HeardResult";
 import type { RecorderState } from "../recorder/recorder";
 import { useRecorder } from "../recorder/useRecorder";
 import { stepWords } from "../stepWords";
-import { TakeFailure } from "../TakeFailure";
+import { TakeFailure } from "../sing/TakeFailure";
 import { useFocusOnChange } from "../useFocusOnChange";
 import { ChooseRecording } from "./ChooseRecording";
 import { ReadingRecording } from "./ReadingRecording";

@@ -6,11 +6,11 @@ import { Text } from "@/features/ui/Text";
 import type { Take } from "@/shared/contract/take";
 import type { Voice } from "@/shared/contract/voice";
 import type { PitchBand } from "@/shared/voice/takeReport";
-import { BandHeading } from "./BandHeading";
-import { bandWords, certaintyWords, noteWord } from "./noteWords";
-import { profileOf, singingVoiceOf } from "./singingVoiceOf";
-import { timeOnNotes } from "./timeOnNotes";
-import { VoiceLadder } from "./VoiceLadder";
+import { BandHeading } from "../BandHeading";
+import { bandWords, certaintyWords, noteWord } from "../noteWords";
+import { profileOf, singingVoiceOf } from "../singingVoiceOf";
+import { timeOnNotes } from "../timeOnNotes";
+import { VoiceLadder } from "../VoiceLadder";
 import { WhyNotes } from "./WhyNotes";
 
 export interface VoicePictureProps {

@@ -8,9 +8,9 @@ import { Text } from "@/features/ui/Text";
 import { colors, mixtures, sizes } from "@/features/ui/theme";
 import { useLayout } from "@/features/ui/useLayout";
 import { noteNow, type NoteNow } from "./noteNow";
-import { noteWord } from "./noteWords";
-import { timeOf, type LiveSound } from "./recorder/liveSound";
-import { enoughTakeS, longestTakeS } from "./recorder/takeProtocol";
+import { noteWord } from "../noteWords";
+import { timeOf, type LiveSound } from "../recorder/liveSound";
+import { enoughTakeS, longestTakeS } from "../recorder/takeProtocol";
 import { useHeard } from "./useHeard";
 
 export interface ListeningScreenProps {

@@ -1,5 +1,5 @@
 import { useCallback, useSyncExternalStore } from "react";
-import type { LiveSound } from "./recorder/liveSound";
+import type { LiveSound } from "../recorder/liveSound";
 
 /**
  * Follows what is heard: draws again at once when `read` gives another value, and only then. The value must be a plain

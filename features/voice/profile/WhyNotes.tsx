@@ -5,7 +5,7 @@ import { Text } from "@/features/ui/Text";
 import { mixtures, sizes } from "@/features/ui/theme";
 import type { Take } from "@/shared/contract/take";
 import type { VoiceProfile } from "@/shared/voice/voiceProfile";
-import { noteWord } from "./noteWords";
+import { noteWord } from "../noteWords";
 import { whyComfort, whyEnd } from "./whyEnd";
 
 export interface WhyNotesProps {

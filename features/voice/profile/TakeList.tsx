@@ -1,7 +1,7 @@
 import { View } from "react-native";
 import { Heading } from "@/features/ui/Heading";
 import type { Take } from "@/shared/contract/take";
-import { bandWords } from "./noteWords";
+import { bandWords } from "../noteWords";
 import { TakeRow } from "./TakeRow";
 import { withoutTake } from "./whyEnd";
 

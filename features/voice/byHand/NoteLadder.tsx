@@ -6,7 +6,7 @@ import { colors, sizes } from "@/features/ui/theme";
 import { webProps } from "@/features/ui/webStyle";
 import { parseNoteName } from "@/shared/music/pitch";
 import type { ByHandFields } from "./byHand";
-import { noteWord } from "./noteWords";
+import { noteWord } from "../noteWords";
 
 export interface NoteLadderProps {
   values: ByHandFields;

@@ -5,14 +5,14 @@ import { Button } from "@/features/ui/Button";
 import { Notice } from "@/features/ui/Notice";
 import { Screen } from "@/features/ui/Screen";
 import type { Voice } from "@/shared/contract/voice";
-import { useChosenVoiceId } from "./chosenVoice";
+import { useChosenVoiceId } from "../chosenVoice";
 import { KeepTake } from "./KeepTake";
-import { warmedWords, whenWords } from "./noteWords";
-import type { RecorderState } from "./recorder/recorder";
-import type { Recorder } from "./recorder/useRecorder";
-import { TakeTrail } from "./replay/TakeTrail";
+import { warmedWords, whenWords } from "../noteWords";
+import type { RecorderState } from "../recorder/recorder";
+import type { Recorder } from "../recorder/useRecorder";
+import { TakeTrail } from "../replay/TakeTrail";
 import { TakeResult } from "./TakeResult";
-import { newVoice, useKeepTake, voiceQueries } from "./voiceQueries";
+import { newVoice, useKeepTake, voiceQueries } from "../voiceQueries";
 
 /** Where the singer goes on to once the take is kept. */
 export type KeptNext = "voice" | "songs";

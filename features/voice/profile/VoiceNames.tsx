@@ -7,7 +7,7 @@ import { Form } from "@/features/ui/Form";
 import { Heading } from "@/features/ui/Heading";
 import { Text } from "@/features/ui/Text";
 import type { Voice } from "@/shared/contract/voice";
-import { newVoice } from "./voiceQueries";
+import { newVoice } from "../voiceQueries";
 
 export interface VoiceNamesProps {
   voices: readonly Voice[];

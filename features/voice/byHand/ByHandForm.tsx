@@ -12,7 +12,7 @@ import { noteName, parseNoteName } from "@/shared/music/pitch";
 import type { SingingVoice } from "@/shared/keys/keyScore";
 import { readByHand, usualComfort, type ByHandFields } from "./byHand";
 import { NoteLadder } from "./NoteLadder";
-import { noteWord } from "./noteWords";
+import { noteWord } from "../noteWords";
 
 export interface ByHandFormProps {
   /** what the voice has now, to start from */

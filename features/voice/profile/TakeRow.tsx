@@ -5,9 +5,9 @@ import { IconButton } from "@/features/ui/IconButton";
 import { Text } from "@/features/ui/Text";
 import { colors } from "@/features/ui/theme";
 import type { Take } from "@/shared/contract/take";
-import { AfterSinging } from "./AfterSinging";
-import { bandWords, effortWords, warmedWords, whenWords } from "./noteWords";
-import { inTune } from "./takeOfHeard";
+import { AfterSinging } from "../sing/AfterSinging";
+import { bandWords, effortWords, warmedWords, whenWords } from "../noteWords";
+import { inTune } from "../takeOfHeard";
 
 export interface TakeRowProps {
   take: Take;

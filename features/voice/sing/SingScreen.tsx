@@ -6,10 +6,10 @@ import { CountInScreen } from "./CountInScreen";
 import { wantsCountIn } from "./countInSetting";
 import { HeardResult, type KeptNext } from "./HeardResult";
 import { ListeningScreen } from "./ListeningScreen";
-import { useRecorder, type Recorder } from "./recorder/useRecorder";
-import { stepWords } from "./stepWords";
+import { useRecorder, type Recorder } from "../recorder/useRecorder";
+import { stepWords } from "../stepWords";
 import { TakeFailure } from "./TakeFailure";
-import { useFocusOnChange } from "./useFocusOnChange";
+import { useFocusOnChange } from "../useFocusOnChange";
 
 export interface SingScreenProps {
   /** the take is in its voice, and the singer goes on to it or to the songs */

@@ -7,7 +7,7 @@ import { Text } from "@/features/ui/Text";
 import { colors } from "@/features/ui/theme";
 import { failureWords } from "./failureWords";
 import { OtherWays } from "./OtherWays";
-import type { Failure } from "./recorder/recorder";
+import type { Failure } from "../recorder/recorder";
 
 export interface TakeFailureProps {
   failure: Failure;

@@ -7,15 +7,15 @@ import { Text } from "@/features/ui/Text";
 import { colors } from "@/features/ui/theme";
 import { useLayout } from "@/features/ui/useLayout";
 import { AfterSinging } from "./AfterSinging";
-import { BandHeading } from "./BandHeading";
+import { BandHeading } from "../BandHeading";
 import { causeWords, isInterruption } from "./failureWords";
 import { NoteDots } from "./NoteDots";
-import { bandWords, certaintyWords } from "./noteWords";
-import type { HeardTake } from "./recorder/recorder";
-import { inTune } from "./takeOfHeard";
-import { timeOnNotes } from "./timeOnNotes";
-import { VoiceLadder } from "./VoiceLadder";
-import { reachesFarther } from "./VoicePicture";
+import { bandWords, certaintyWords } from "../noteWords";
+import type { HeardTake } from "../recorder/recorder";
+import { inTune } from "../takeOfHeard";
+import { timeOnNotes } from "../timeOnNotes";
+import { VoiceLadder } from "../VoiceLadder";
+import { reachesFarther } from "../profile/VoicePicture";
 
 export interface TakeResultProps {
   take: HeardTake;

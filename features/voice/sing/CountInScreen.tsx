@@ -4,7 +4,7 @@ import { LiveText } from "@/features/ui/LiveText";
 import { Screen } from "@/features/ui/Screen";
 import { Text } from "@/features/ui/Text";
 import { colors } from "@/features/ui/theme";
-import { countInBeats } from "./recorder/countIn";
+import { countInBeats } from "../recorder/countIn";
 
 export interface CountInScreenProps {
   /** beats still to come, this one with them */

@@ -6,9 +6,9 @@ import { session } from "@/features/api/session";
 import { shelf } from "@/features/api/shelf";
 import { midiToHz } from "@/shared/music/pitch";
 import type { TakeReport } from "@/shared/voice/takeReport";
-import { MicrophoneUnavailable, openMicrophone } from "./recorder/microphone";
-import type { Interruption, Processing, Unavailable } from "./recorder/recorder";
-import type { FromTakeWorker, TakePart, ToTakeWorker } from "./recorder/takeProtocol";
+import { MicrophoneUnavailable, openMicrophone } from "../recorder/microphone";
+import type { Interruption, Processing, Unavailable } from "../recorder/recorder";
+import type { FromTakeWorker, TakePart, ToTakeWorker } from "../recorder/takeProtocol";
 import { SingScreen } from "./SingScreen";
 
 jest.mock("idb-keyval", () => jest.requireActual<{ memoryIdb: object }>("@/__tests__/client/memoryIdb").memoryIdb);
@@ -20,12 +20,12 @@ jest.mock("expo-router", () => ({
     </a>
   ),
 }));
-jest.mock("./recorder/openTakeWorker", () => ({ openTakeWorker: () => mockWorker }));
-jest.mock("./recorder/microphone", () => ({
-  ...jest.requireActual<object>("./recorder/microphone"),
+jest.mock("../recorder/openTakeWorker", () => ({ openTakeWorker: () => mockWorker }));
+jest.mock("../recorder/microphone", () => ({
+  ...jest.requireActual<object>("../recorder/microphone"),
   openMicrophone: jest.fn(),
 }));
-jest.mock("./recorder/unkeptTake", () => ({
+jest.mock("../recorder/unkeptTake", () => ({
   takeOfThisTab: () => mockUnkept.mark,
   markTakeOfThisTab: (id: string | null) => {
     mockUnkept.mark = id;

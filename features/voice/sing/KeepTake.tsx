@@ -7,8 +7,8 @@ import { Field } from "@/features/ui/Field";
 import { Form } from "@/features/ui/Form";
 import { Heading } from "@/features/ui/Heading";
 import type { Voice } from "@/shared/contract/voice";
-import { pickVoice } from "./useSingingVoice";
-import { newVoice } from "./voiceQueries";
+import { pickVoice } from "../useSingingVoice";
+import { newVoice } from "../voiceQueries";
 
 export interface KeepTakeProps {
   voices: readonly Voice[];

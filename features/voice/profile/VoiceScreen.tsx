@@ -7,14 +7,14 @@ import { QueryState } from "@/features/ui/QueryState";
 import { Screen } from "@/features/ui/Screen";
 import { Skeleton } from "@/features/ui/Skeleton";
 import { useLayout } from "@/features/ui/useLayout";
-import { chooseVoice, useChosenVoiceId } from "./chosenVoice";
-import { pickVoice } from "./useSingingVoice";
+import { chooseVoice, useChosenVoiceId } from "../chosenVoice";
+import { pickVoice } from "../useSingingVoice";
 import { MovingVoice } from "./MovingVoice";
 import { TakeList } from "./TakeList";
-import { TrendPicture } from "./trend/TrendPicture";
+import { TrendPicture } from "../trend/TrendPicture";
 import { VoiceNames } from "./VoiceNames";
 import { VoicePicture } from "./VoicePicture";
-import { useEraseTake, useRemoveVoice, useSaveTake, useSaveVoice, voiceQueries } from "./voiceQueries";
+import { useEraseTake, useRemoveVoice, useSaveTake, useSaveVoice, voiceQueries } from "../voiceQueries";
 import type { Take } from "@/shared/contract/take";
 import type { Voice } from "@/shared/contract/voice";
 

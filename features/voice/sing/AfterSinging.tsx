@@ -1,7 +1,7 @@
 import { View } from "react-native";
 import { Segmented } from "@/features/ui/Segmented";
 import { Text } from "@/features/ui/Text";
-import { effortWords } from "./noteWords";
+import { effortWords } from "../noteWords";
 
 export interface AfterSingingProps {
   warmedUp: boolean | null;

@@ -1,6 +1,6 @@
 import { parseNoteName } from "@/shared/music/pitch";
 import type { SingingVoice } from "@/shared/keys/keyScore";
-import { noteWord } from "./noteWords";
+import { noteWord } from "../noteWords";
 
 /** What stands in the four fields, as typed. */
 export interface ByHandFields {

@@ -4,10 +4,10 @@ import { QueryState } from "@/features/ui/QueryState";
 import { Screen } from "@/features/ui/Screen";
 import { Text } from "@/features/ui/Text";
 import { ByHandForm } from "./ByHandForm";
-import { chooseVoice, useChosenVoiceId } from "./chosenVoice";
-import { singingVoiceOf } from "./singingVoiceOf";
-import { pickVoice } from "./useSingingVoice";
-import { newVoice, useSaveVoice, voiceQueries } from "./voiceQueries";
+import { chooseVoice, useChosenVoiceId } from "../chosenVoice";
+import { singingVoiceOf } from "../singingVoiceOf";
+import { pickVoice } from "../useSingingVoice";
+import { newVoice, useSaveVoice, voiceQueries } from "../voiceQueries";
 import { useState } from "react";
 
 export interface ByHandScreenProps {

@@ -47,7 +47,7 @@ export function createApp(dataSource: DataSource, logger: Logger, settings: AppS
     express.json({ limit: "2mb" }),
     cookieParser(),
     api.router,
-    unknownRoute,
+    unknownRoute(api),
   );
   app.use(clientFiles(settings.staticDir));
   app.use(errorHandler);

@@ -95,12 +95,24 @@ it("names at most twenty fields", async () => {
 it.each([
   ["get", "/api"],
   ["get", "/api/nothing"],
-  ["post", "/api/voices"],
-  ["delete", "/api/auth/sign-in"],
-  ["patch", "/api/songs/1"],
+  ["patch", "/api/songs/1/2"],
 ] as const)("answers %s %s with 404 in JSON", async (method, path) => {
   const response = await request(server.app)[method](path).expect(404).expect("Content-Type", /json/);
   expect(response.body).toMatchObject({ code: "not-found" });
+});
+
+it.each([
+  ["post", "/api/voices", "GET, HEAD"],
+  ["delete", "/api/auth/sign-in", "POST"],
+  ["patch", "/api/songs/1", "GET, HEAD, PUT, DELETE"],
+  ["put", "/api/health/", "GET, HEAD"],
+] as const)("answers %s %s with 405 in JSON, and says what it takes", async (method, path, allowed) => {
+  const response = await request(server.app)[method](path).expect(405).expect("Content-Type", /json/);
+  expect(response.headers.allow).toBe(allowed);
+  expect(response.body).toEqual({
+    code: "method-not-allowed",
+    message: expect.stringContaining(` takes ${allowed}.`),
+  });
 });
 
 it("tells nothing about a fault of its own", async () => {

@@ -48,14 +48,22 @@ it.each([...clientRoutes])("shows the client's page at %s", async (route) => {
   await request(server.app).head(address).expect(200);
 });
 
-it.each(["/nowhere", "/songs/a/b", "/songs/a/keys/b", "/voice/sing/loud", "/_sitemap", "/index", "//songs", "/%zz"])(
-  "answers 404 at %s, with the page so that the client can say so",
-  async (address) => {
-    const response = await get(address).expect(404).expect("Content-Type", /html/);
-    expect(response.text).toBe(page);
-    await request(server.app).head(address).expect(404);
-  },
-);
+it.each([
+  "/nowhere",
+  "/songs/not-a-uuid",
+  "/songs/not-a-uuid/keys",
+  "/songs/a/b",
+  "/songs/a/keys/b",
+  "/voice/sing/loud",
+  "/_sitemap",
+  "/index",
+  "//songs",
+  "/%zz",
+])("answers 404 at %s, with the page so that the client can say so", async (address) => {
+  const response = await get(address).expect(404).expect("Content-Type", /html/);
+  expect(response.text).toBe(page);
+  await request(server.app).head(address).expect(404);
+});
 
 it("does not let a condition of the asker's turn the 404 into a 304", async () => {
   const known = await get("/songs").expect(200);

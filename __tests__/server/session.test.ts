@@ -111,10 +111,16 @@ describe("the access token", () => {
       "of another scheme": `Basic ${token}`,
       empty: "",
     };
+    const told: Record<string, string> = {
+      expired: "Your access has expired. Refresh it, or sign in again.",
+      "of another scheme": "You are not signed in.",
+      empty: "You are not signed in.",
+    };
     for (const [what, header] of Object.entries(bad)) {
       const response = await ask(header);
       expect([what, response.status, response.body.code]).toEqual([what, 401, "no-session"]);
       expect(response.headers["www-authenticate"]).toBe("Bearer");
+      expect(response.body.message).toBe(told[what] ?? "This access token is not valid.");
     }
   });
 });

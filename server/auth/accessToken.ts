@@ -16,17 +16,23 @@ export function signAccessToken(secret: string, userId: string): string {
 /** Lets only requests with a valid access token through, and notes who asks. */
 export function authenticate(secret: string): RequestHandler {
   return (req, res, next) => {
-    const token = /^Bearer ([\w-]+\.[\w-]+\.[\w-]+)$/i.exec(req.get("authorization") ?? "")?.[1];
-    if (!token) throw noSession();
+    const given = req.get("authorization") ?? "";
+    if (!/^Bearer\b/i.test(given)) throw noSession();
+    const token = /^Bearer ([\w-]+\.[\w-]+\.[\w-]+)$/i.exec(given)?.[1];
+    if (!token) throw notValid();
     setCurrentUserId(res, subjectOf(token, secret));
     next();
   };
 }
 
+const notValid = () => noSession("This access token is not valid.");
+
 function subjectOf(token: string, secret: string): string {
   try {
     return claims.parse(jwt.verify(token, secret, { algorithms: ["HS256"], issuer })).sub;
-  } catch {
-    throw noSession("Your access has expired. Refresh it, or sign in again.");
+  } catch (error) {
+    throw error instanceof jwt.TokenExpiredError
+      ? noSession("Your access has expired. Refresh it, or sign in again.")
+      : notValid();
   }
 }

@@ -17,13 +17,18 @@ const verbs: Record<string, Verb> = {
 };
 
 async function main([name = "", ...args]: string[]): Promise<void> {
+  if (name === "--help" || name === "-h" || name === "help") {
+    const usages = Object.values(verbs).map(({ usage }) => `${usage}\n`);
+    process.stdout.write(usages.join("\n"));
+    return;
+  }
   const verb = Object.hasOwn(verbs, name) ? verbs[name] : undefined;
   if (!verb) throw new BadInput(`${name ? `There is no verb "${name}".` : "Name a verb."} Verbs: ${Object.keys(verbs).join(", ")}.`);
   if (args.includes("--help")) {
     process.stdout.write(`${verb.usage}\n`);
     return;
   }
-  for (const line of await verb.run(args)) process.stdout.write(`${JSON.stringify(line)}\n`);
+  for await (const line of await verb.run(args)) process.stdout.write(`${JSON.stringify(line)}\n`);
 }
 
 main(process.argv.slice(2)).catch((error: unknown) => {

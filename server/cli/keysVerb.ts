@@ -4,8 +4,9 @@ import { scoreKeys } from "../../shared/keys/scoreKeys";
 import type { Mode } from "../../shared/music/keyName";
 import { findKey } from "../../shared/songs/findKey";
 import { readMelodyFile } from "../../shared/songs/melodyFile";
+import { readInput, songSize } from "./inputFile";
 import { BadInput, type Verb } from "./verb";
-import { readBand, readBytes, readKey, readOptions, required } from "./verbOptions";
+import { readBand, readKey, readOptions, required } from "./verbOptions";
 
 /** Semitones kept inside the range where no comfort band is given; defaults of practice, not measurements. */
 const reserve = { above: 2, below: 1 };
@@ -46,8 +47,10 @@ async function readTune(values: Record<string, string | undefined>): Promise<{ t
     const { tonic, mode } = home ?? readKey(required(values.home, "home"), "home");
     return { tune: { kind: "span", ...readBand(values.span, "span"), home: tonic }, mode };
   }
-  const path = required(values.melody, "melody");
-  const file = readMelodyFile(basename(path), await readBytes(path));
+  const path = values.melody;
+  if (path === undefined || path === "")
+    throw new BadInput("Give the tune: --melody FILE, or --span LOW-HIGH --home NOTE.");
+  const file = readMelodyFile(basename(path), await readInput(path, songSize));
   if (!file.ok) throw new BadInput(`${basename(path)}: ${file.reason}`);
   const melody = file.voices[file.proposed]?.melody;
   if (!melody || melody.notes.length === 0) throw new BadInput(`${basename(path)} holds no melody.`);

@@ -5,12 +5,13 @@ import { singPhrase } from "../../__tests__/sound/singer";
 import { writeWav } from "../../__tests__/sound/wavFile";
 import { demoSongs } from "../../shared/songs/demoSongs";
 import { keyVerb, melodyVerb, transposeVerb } from "./melodyVerbs";
+import { linesOf } from "../../__tests__/server/linesOf";
 import { BadInput, type Verb } from "./verb";
 
 const [lantern, ferry] = demoSongs as [(typeof demoSongs)[number], (typeof demoSongs)[number]];
 let folder: string;
 const at = (name: string) => join(folder, name);
-const one = async (verb: Verb, ...args: string[]) => (await verb.run(args))[0] as Record<string, unknown>;
+const one = async (verb: Verb, ...args: string[]) => (await linesOf(verb, args))[0] as Record<string, unknown>;
 
 beforeAll(async () => {
   folder = await mkdtemp(join(tmpdir(), "larkspan-"));
@@ -19,6 +20,7 @@ beforeAll(async () => {
     "lantern.txt": lantern.chart,
     "ferry.txt": ferry.chart,
     "minor.txt": "Em Am B7 Em\nEm Am B7 Em",
+    "dorian.txt": "Dm C Dm G",
     "unread.txt": "D  Hx9  A\nla la la",
     "prose.txt": "Not a chord in here.",
     "broken.abc": "no tune",
@@ -59,13 +61,13 @@ describe("melody", () => {
   });
 
   test("prints a line a file", async () => {
-    expect(await melodyVerb.run([at("lantern.abc"), at("lantern.abc")])).toHaveLength(2);
+    expect(await linesOf(melodyVerb, [at("lantern.abc"), at("lantern.abc")])).toHaveLength(2);
   });
 });
 
 describe("key", () => {
   test("prints the agreed fields for charts, melody files and recordings", async () => {
-    const lines = (await keyVerb.run([
+    const lines = (await linesOf(keyVerb, [
       at("lantern.txt"),
       at("ferry.txt"),
       at("lantern.abc"),
@@ -106,11 +108,33 @@ describe("transpose", () => {
     expect(await one(transposeVerb, at("minor.txt"), "--to", "A")).toMatchObject({ from: "Em", to: "Am" });
   });
 
+  test("says the key as it was asked for, where the song has such a third", async () => {
+    expect(await one(transposeVerb, at("dorian.txt"), "--to", "E dorian")).toMatchObject({
+      from: "D dorian",
+      to: "E dorian",
+      text: "Em D Em A",
+    });
+    expect(await one(transposeVerb, at("minor.txt"), "--to", "A", "--from", "Em")).toMatchObject({ to: "Am" });
+    await expect(one(transposeVerb, at("minor.txt"), "--to", "A mixolydian", "--from", "Em")).rejects.toThrow(
+      /stays minor when it is moved; name a minor key/,
+    );
+  });
+
   test("leaves what it cannot read", async () => {
     expect(await one(transposeVerb, at("unread.txt"), "--to", "G", "--from", "D")).toMatchObject({
       text: "G  Hx9  D\nla la la",
     });
   });
+});
+
+test("a bad file silences no other: a line each, and one line about the bad ones at the end", async () => {
+  const lines: object[] = [];
+  const read = async () => {
+    for await (const line of await keyVerb.run([at("gone.txt"), at("lantern.txt"), at("prose.txt"), at("minor.txt")]))
+      lines.push(line);
+  };
+  await expect(read()).rejects.toThrow(`${at("gone.txt")}: there is no such file. 2 of 4 files could not be used.`);
+  expect(lines).toMatchObject([{ file: at("lantern.txt") }, { file: at("minor.txt") }]);
 });
 
 test.each<[string, Verb, string[], RegExp]>([
@@ -129,7 +153,7 @@ test.each<[string, Verb, string[], RegExp]>([
   ["an option that is not known", keyVerb, ["lantern.txt", "--loud"], /option/i],
 ])("%s is bad input, told in one line", async (_, verb, args, message) => {
   const placed = args.map((argument) => (/\.\w+$|^\.$/.test(argument) ? at(argument) : argument));
-  const failure = verb.run(placed);
+  const failure = linesOf(verb, placed);
   await expect(failure).rejects.toThrow(BadInput);
   await expect(failure).rejects.toThrow(message);
   await failure.catch((error: Error) => expect(error.message).not.toContain("\n"));

@@ -1,4 +1,4 @@
-import type { KeyName } from "../../shared/music/keyName";
+import { type KeyName, type Mode, scaleSteps } from "../../shared/music/keyName";
 import { keySign } from "../../shared/music/keyWords";
 import { type Chart, printChart, transposeChart } from "../../shared/songs/chart";
 import { findKey, type KeyEvidence, rankKeys } from "../../shared/songs/findKey";
@@ -6,7 +6,7 @@ import type { Melody, MelodyNote } from "../../shared/songs/melody";
 import { tessitura, tessituragram } from "../../shared/songs/tessituragram";
 import { melodyFromRecording, type RecordedMelody } from "./recordedMelody";
 import { chartFromFile, isMelodyFile, isRecording, melodyFromFile } from "./songFile";
-import { BadInput, type Verb } from "./verb";
+import { BadInput, eachFile, type Verb } from "./verb";
 import { readKey, readOptions, required } from "./verbOptions";
 
 /** How far behind the best key another may lie to be what somebody means who names its mode. */
@@ -15,9 +15,9 @@ const likelyEnough = 0.15;
 /** The notes of a tune, its home note and where it lives. */
 export const melodyVerb: Verb = {
   usage: "melody FILE…   (.mid .musicxml .xml .mxl .abc, or a recording)",
-  async run(args) {
+  async *run(args) {
     const { rest: files } = readOptions(args, []);
-    return eachFile(files, melodyVerb, async (file) => {
+    yield* eachFile(named(files, melodyVerb), async (file) => {
       const { notes, home, mode } = await melodyOf(file);
       const { mean, sd, q1, median, q3, lowMidi, highMidi } = tessitura(notes)!;
       return {
@@ -41,9 +41,9 @@ export const melodyVerb: Verb = {
 /** The key of charts and melody files. */
 export const keyVerb: Verb = {
   usage: "key FILE…   (chart text, .mid .musicxml .xml .mxl .abc, or a recording)",
-  async run(args) {
+  async *run(args) {
     const { rest: files } = readOptions(args, []);
-    return eachFile(files, keyVerb, async (file) => {
+    yield* eachFile(named(files, keyVerb), async (file) => {
       const { key, confidence, runnerUp, reasons } = findKey(await evidenceOf(file))!;
       return { file, tonic: key.tonic, mode: key.mode, confidence, runnerUp, reasons };
     });
@@ -53,31 +53,37 @@ export const keyVerb: Verb = {
 /** A chart in another key. */
 export const transposeVerb: Verb = {
   usage: "transpose FILE… --to KEY [--from KEY]   (chart text; KEY such as D, F#m or Bb)",
-  async run(args) {
+  async *run(args) {
     const { values, rest: files } = readOptions(args, ["to", "from"]);
     const target = readKey(required(values["to"], "to"), "to");
     const source = values["from"] === undefined ? null : readKey(values["from"], "from");
-    return eachFile(files, transposeVerb, async (file) => {
+    yield* eachFile(named(files, transposeVerb), async (file) => {
       const chart = await chartFromFile(file);
       const from = source ?? writtenKey(chart, target);
-      if (from.mode === "major" && target.mode === "minor") {
-        throw new BadInput(`${file}: A song in ${keySign(from)} stays major when it is moved; name a major key.`);
+      const to = targetFor(from, target);
+      if (!to) {
+        const kind = thirdOf(from.mode);
+        throw new BadInput(`${file}: A song in ${keySign(from)} stays ${kind} when it is moved; name a ${kind} key.`);
       }
-      const to: KeyName = { tonic: target.tonic, mode: from.mode };
       return { file, from: keySign(from), to: keySign(to), text: printChart(transposeChart(chart, from, to)) };
     });
   },
 };
 
-async function eachFile(
-  files: readonly string[],
-  verb: Verb,
-  read: (file: string) => Promise<object>,
-): Promise<object[]> {
+function named(files: string[], verb: Verb): string[] {
   if (files.length === 0) throw new BadInput(`Name a file: ${verb.usage}`);
-  const lines: object[] = [];
-  for (const file of files) lines.push(await read(file));
-  return lines;
+  return files;
+}
+
+/** A mode by its third. */
+function thirdOf(mode: Mode): "major" | "minor" {
+  return scaleSteps(mode).includes(3) ? "minor" : "major";
+}
+
+/** A bare tonic keeps the mode of the song, a mode that is named must have the song's third; null where it has not. */
+function targetFor(from: KeyName, target: KeyName): KeyName | null {
+  if (target.mode === "major") return { tonic: target.tonic, mode: from.mode };
+  return thirdOf(target.mode) === thirdOf(from.mode) ? target : null;
 }
 
 async function evidenceOf(file: string): Promise<KeyEvidence> {
@@ -99,10 +105,16 @@ function inTune({ notes, tuningCents }: RecordedMelody): MelodyNote[] {
   return notes.map((note) => ({ ...note, midi: note.midi - tuningCents / 100 }));
 }
 
-/** The key a chart is in; when the target is said to be minor, the likeliest minor one, if it is likely at all. */
+/**
+ * The key a chart is in; when the target is said to be minor or of another mode, the likeliest one with such a third,
+ * if it is likely at all, in that mode.
+ */
 function writtenKey(chart: Chart, target: KeyName): KeyName {
   const [best, ...others] = rankKeys({ chart });
-  const minor = others.find(({ key }) => key.mode === "minor");
-  const close = minor !== undefined && minor.score > best!.score - likelyEnough;
-  return target.mode === "minor" && close ? minor.key : best!.key;
+  if (target.mode === "major") return best!.key;
+  const third = thirdOf(target.mode);
+  const like = [best!, ...others].find(({ key }) => key.mode === third);
+  return like !== undefined && like.score > best!.score - likelyEnough
+    ? { tonic: like.key.tonic, mode: target.mode }
+    : best!.key;
 }

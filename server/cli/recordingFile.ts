@@ -1,10 +1,10 @@
 import { spawn } from "node:child_process";
-import { readFile, stat } from "node:fs/promises";
 import { basename, resolve } from "node:path";
+import { readInput } from "./inputFile";
 import { BadInput } from "./verb";
 import { readWavPcm, type Recording } from "./wavPcm";
 
-const MOST_BYTES = 500_000_000;
+const MOST = { bytes: 500_000_000, words: "500 MB" };
 const MOST_SECONDS = 600;
 const DECODED_RATE = 44_100;
 
@@ -15,17 +15,12 @@ const DECODED_RATE = 44_100;
  */
 export async function readRecording(path: string): Promise<Recording> {
   const name = basename(path);
-  const facts = await stat(path).catch(() => null);
-  if (!facts) throw new BadInput(`${name} does not exist.`);
-  if (!facts.isFile()) throw new BadInput(`${name} is not a file.`);
-  if (facts.size > MOST_BYTES) throw new BadInput(`${name} is too large.`);
-  const bytes = await readFile(path).catch(() => {
-    throw new BadInput(`${name} cannot be read.`);
-  });
+  const bytes = await readInput(path, MOST);
   if (bytes.length === 0) throw new BadInput(`${name} is empty.`);
   const isWav = bytes.toString("latin1", 0, 4) === "RIFF" || /\.wav$/i.test(name);
   const recording = isWav ? readWavPcm(name, bytes) : await decode(name, path);
-  if (recording.pcm.length === 0) throw new BadInput(`${name} holds no sound.`);
+  if (recording.pcm.length === 0)
+    throw new BadInput(recording.promisedS === null ? `${name} holds no sound.` : `${name} is cut off before its sound.`);
   if (recording.pcm.length / recording.sampleRate > MOST_SECONDS) throw new BadInput(`${name} is longer than ten minutes.`);
   return recording;
 }
@@ -41,7 +36,7 @@ function decode(name: string, path: string): Promise<Recording> {
     child.on("close", (code) => {
       const bytes = Buffer.concat(chunks);
       if (code !== 0 || bytes.length < 4) fail(new BadInput(`${name} holds no sound that can be read.`));
-      else done({ pcm: floats(bytes), sampleRate: DECODED_RATE });
+      else done({ pcm: floats(bytes), sampleRate: DECODED_RATE, promisedS: null });
     });
   });
 }

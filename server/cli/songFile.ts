@@ -1,10 +1,9 @@
-import { readFile, stat } from "node:fs/promises";
 import { chartTokens, parseChart, type Chart } from "../../shared/songs/chart";
 import { type MelodyVoice } from "../../shared/songs/melodyVoice";
 import { readMelodyFile } from "../../shared/songs/melodyFile";
+import { readInput, songSize } from "./inputFile";
 import { BadInput } from "./verb";
 
-const mostBytes = 5_000_000;
 const melodyNames = /\.(?:midi?|musicxml|xml|mxl|abc)$/i;
 const recordingNames = /\.(?:wav|flac|mp3|m4a|aac|ogg|oga|opus|webm|aiff?)$/i;
 
@@ -20,29 +19,17 @@ export function isMelodyFile(path: string): boolean {
 
 /** The voice of a melody file that is most likely sung. */
 export async function melodyFromFile(path: string): Promise<MelodyVoice> {
-  const read = readMelodyFile(path, await bytesOf(path));
+  const read = readMelodyFile(path, await readInput(path, songSize));
   if (!read.ok) throw new BadInput(`${path}: ${read.reason}`);
   return read.voices[read.proposed]!;
 }
 
 /** A chart with at least one chord. */
 export async function chartFromFile(path: string): Promise<Chart> {
-  const bytes = await bytesOf(path);
+  const bytes = await readInput(path, songSize);
   if (bytes.includes(0)) throw new BadInput(`${path}: This is no chart; it is not a text file.`);
   const chart = parseChart(new TextDecoder().decode(bytes));
   if (!chartTokens(chart).some((token) => token.chord))
     throw new BadInput(`${path}: There are no chords in this file.`);
   return chart;
-}
-
-async function bytesOf(path: string): Promise<Uint8Array> {
-  const about = await stat(path).catch(() => null);
-  if (!about) throw new BadInput(`${path}: There is no such file.`);
-  if (!about.isFile()) throw new BadInput(`${path}: This is no file.`);
-  if (about.size > mostBytes) throw new BadInput(`${path}: This file is larger than 5 MB.`);
-  try {
-    return new Uint8Array(await readFile(path));
-  } catch {
-    throw new BadInput(`${path}: This file cannot be read.`);
-  }
 }

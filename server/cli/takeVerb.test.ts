@@ -5,6 +5,7 @@ import { join } from "node:path";
 import { singPhrase } from "../../__tests__/sound/singer";
 import { wavBytes, writeWav } from "../../__tests__/sound/wavFile";
 import { takeVerb } from "./takeVerb";
+import { linesOf } from "../../__tests__/server/linesOf";
 import { BadInput } from "./verb";
 import { readWavPcm } from "./wavPcm";
 
@@ -35,7 +36,7 @@ function wav(code: number, bits: number, channels: number, data: Buffer, extensi
 
 test("prints the range, the comfort and the notes of a recording", async () => {
   writeWav(at("sung.wav"), sung.pcm, 16000);
-  const [line] = (await takeVerb.run([at("sung.wav")])) as Record<string, unknown>[];
+  const [line] = (await linesOf(takeVerb, [at("sung.wav")])) as Record<string, unknown>[];
   expect(Object.keys(line!)).toEqual(["file", "verdict", "lowMidi", "highMidi", "comfortLowMidi", "comfortHighMidi", "certainty", "reasons", "notes"]);
   expect(line).toMatchObject({ file: at("sung.wav"), verdict: "heard" });
   expect(line!["lowMidi"]).toBeCloseTo(50, 0);
@@ -45,7 +46,7 @@ test("prints the range, the comfort and the notes of a recording", async () => {
 
 test("--frames adds the pitch of every hundredth of a second, null where there is none", async () => {
   writeWav(at("frames.wav"), sung.pcm, 16000);
-  const [line] = (await takeVerb.run([at("frames.wav"), "--frames"])) as { f0: { t: number; hz: number | null }[] }[];
+  const [line] = (await linesOf(takeVerb, [at("frames.wav"), "--frames"])) as { f0: { t: number; hz: number | null }[] }[];
   expect(line!.f0).toHaveLength(Math.floor(sung.pcm.length / 160));
   expect(line!.f0[0]).toEqual({ t: 0, hz: null });
   expect(line!.f0[60]!.t).toBe(0.6);
@@ -57,7 +58,7 @@ test("a hundred recordings in one call give a line each, in their order", async 
   const high = singPhrase({ notes: [57, 59, 61, 64].map((midi) => ({ midi, durationS: 0.5 })), seed: 5, sampleRate: 8000, padS: 0.1 });
   const files = Array.from({ length: 100 }, (_, k) => at(`class-${k}.wav`));
   files.forEach((file, k) => writeWav(file, k % 10 === 9 ? new Float32Array(4000) : k % 2 ? high.pcm : low.pcm, 8000));
-  const lines = (await takeVerb.run(files)) as { file: string; verdict: string; lowMidi: number | null }[];
+  const lines = (await linesOf(takeVerb, files)) as { file: string; verdict: string; lowMidi: number | null }[];
   expect(lines.map(({ file }) => file)).toEqual(files);
   lines.forEach(({ verdict, lowMidi }, k) => {
     if (k % 10 === 9) expect([verdict, lowMidi]).toEqual(["too-quiet", null]);
@@ -67,7 +68,7 @@ test("a hundred recordings in one call give a line each, in their order", async 
 
 test("silence has a verdict and no numbers", async () => {
   writeWav(at("silence.wav"), new Float32Array(32000), 16000);
-  expect(await takeVerb.run([at("silence.wav")])).toMatchObject([{ verdict: "too-quiet", lowMidi: null, highMidi: null, comfortLowMidi: null, certainty: 0, notes: [] }]);
+  expect(await linesOf(takeVerb, [at("silence.wav")])).toMatchObject([{ verdict: "too-quiet", lowMidi: null, highMidi: null, comfortLowMidi: null, certainty: 0, notes: [] }]);
 });
 
 test("every kind of PCM and float reads alike, several channels as their mean", () => {
@@ -98,13 +99,13 @@ test("bad input is refused with one clear line that names the file", async () =>
   writeFileSync(at("alaw.wav"), wav(6, 8, 1, Buffer.alloc(100)));
   writeFileSync(at("text.mp3"), "nor is this");
   for (const name of ["missing.wav", "empty.wav", "text.wav", "cut.wav", "alaw.wav", "text.mp3"]) {
-    const error: unknown = await takeVerb.run([at(name)]).catch((reason: unknown) => reason);
+    const error: unknown = await linesOf(takeVerb, [at(name)]).catch((reason: unknown) => reason);
     expect(error).toBeInstanceOf(BadInput);
     expect((error as BadInput).message).toContain(name);
     expect((error as BadInput).message).not.toContain("\n");
   }
-  await expect(takeVerb.run([])).rejects.toThrow(BadInput);
-  await expect(takeVerb.run([folder])).rejects.toThrow(BadInput);
+  await expect(linesOf(takeVerb, [])).rejects.toThrow(BadInput);
+  await expect(linesOf(takeVerb, [folder])).rejects.toThrow(BadInput);
 });
 
 test("other formats come through ffmpeg where it is installed, else a line says so", async () => {
@@ -112,10 +113,28 @@ test("other formats come through ffmpeg where it is installed, else a line says 
   const made = spawnSync("ffmpeg", ["-v", "error", "-y", "-i", at("source.wav"), at("sung.flac")]);
   if (made.status !== 0) {
     writeFileSync(at("sung.flac"), "fLaC");
-    await expect(takeVerb.run([at("sung.flac")])).rejects.toThrow(/ffmpeg/);
+    await expect(linesOf(takeVerb, [at("sung.flac")])).rejects.toThrow(/ffmpeg/);
     return;
   }
-  const [line] = (await takeVerb.run([at("sung.flac")])) as { verdict: string; lowMidi: number }[];
+  const [line] = (await linesOf(takeVerb, [at("sung.flac")])) as { verdict: string; lowMidi: number }[];
   expect(line!.verdict).toBe("heard");
   expect(line!.lowMidi).toBeCloseTo(50, 0);
+});
+
+test("a wav that is cut off says how much of it is there, and one without any sound is refused", async () => {
+  const bytes = wavBytes(sung.pcm, 16000);
+  writeFileSync(at("cut.wav"), bytes.subarray(0, Math.floor(bytes.length / 2)));
+  const [line] = (await linesOf(takeVerb, [at("cut.wav")])) as { reasons: string[] }[];
+  const whole = sung.pcm.length / 16000;
+  const told = /^The file is cut off: ([\d.]+) of ([\d.]+) s are there\.$/.exec(line!.reasons[0]!);
+  expect(Number(told![1])).toBeCloseTo(whole / 2, 0);
+  expect(Number(told![2])).toBeCloseTo(whole, 0);
+  writeFileSync(at("head.wav"), bytes.subarray(0, 44));
+  await expect(linesOf(takeVerb, [at("head.wav")])).rejects.toThrow("head.wav is cut off before its sound.");
+});
+
+test("of a file no word is said about standing before a microphone", async () => {
+  writeWav(at("mute.wav"), new Float32Array(32000), 16000);
+  const [line] = (await linesOf(takeVerb, [at("mute.wav")])) as { reasons: string[] }[];
+  expect(line!.reasons).toEqual(["The recording holds hardly any sound."]);
 });

@@ -1,5 +1,3 @@
-import { readFile } from "node:fs/promises";
-import { basename } from "node:path";
 import { parseArgs, type ParseArgsConfig } from "node:util";
 import { parseKeyName, type KeyName } from "../../shared/music/keyName";
 import { parseNoteName } from "../../shared/music/pitch";
@@ -71,12 +69,4 @@ export function readWhole(text: string, name: string, least: number, most: numbe
   if (text.trim() === "" || !Number.isInteger(value) || value < least || value > most)
     throw new BadInput(`--${name} wants a whole number from ${least} to ${most}, not "${text}".`);
   return value;
-}
-
-export async function readBytes(path: string): Promise<Uint8Array> {
-  try {
-    return await readFile(path);
-  } catch {
-    throw new BadInput(`${basename(path)} cannot be read.`);
-  }
 }

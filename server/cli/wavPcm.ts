@@ -4,7 +4,12 @@ import { BadInput } from "./verb";
 export interface Recording {
   pcm: Float32Array;
   sampleRate: number;
+  /** seconds that the file says it holds, where it is cut off before that; else null */
+  promisedS: number | null;
 }
+
+/** A size that recorders write while they do not know it yet; it promises nothing. */
+const UNKNOWN_SIZE = 0x7ffff000;
 
 const PCM = 1;
 const FLOAT = 3;
@@ -19,7 +24,7 @@ interface Format {
 
 /**
  * Reads a RIFF wav of 8, 16, 24 or 32 bit PCM or 32 or 64 bit float, WAVE_FORMAT_EXTENSIBLE included; channels are averaged.
- * A file cut off in its samples gives what is there.
+ * A file cut off in its samples gives what is there, and says so.
  *
  * @param name what to call the file in a message
  * @throws BadInput if it is broken or of another kind
@@ -35,7 +40,10 @@ export function readWavPcm(name: string, bytes: Buffer): Recording {
     if (kind === "fmt ") format = readFormat(name, bytes.subarray(from, from + size));
     if (kind === "data") {
       if (!format) break;
-      return { pcm: mixDown(bytes.subarray(from, Math.min(bytes.length, from + size)), format), sampleRate: format.sampleRate };
+      const pcm = mixDown(bytes.subarray(from, Math.min(bytes.length, from + size)), format);
+      const cutOff = from + size > bytes.length && size < UNKNOWN_SIZE;
+      const promisedS = cutOff ? size / ((format.bits / 8) * format.channels * format.sampleRate) : null;
+      return { pcm, sampleRate: format.sampleRate, promisedS };
     }
     at = from + size + (size % 2);
   }

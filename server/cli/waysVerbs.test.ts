@@ -2,6 +2,7 @@ import { mkdtemp, writeFile } from "node:fs/promises";
 import { tmpdir } from "node:os";
 import { join } from "node:path";
 import { keysVerb } from "./keysVerb";
+import { linesOf } from "../../__tests__/server/linesOf";
 import { BadInput, type Verb } from "./verb";
 import { instrumentsVerb, shapesVerb, tensionVerb, waysVerb } from "./waysVerbs";
 
@@ -18,7 +19,7 @@ beforeAll(async () => {
 test("keys prints a line a key with the agreed fields, best first", async () => {
   const fields = ["tonic", "octave", "lowMidi", "highMidi", "score", "parts", "beyond", "reason"];
   for (const input of [`--melody ${join(folder, "slip.abc")}`, "--span D4-D5 --home G"]) {
-    const lines = await keysVerb.run(words(`${input} --voice A2-E4 --comfort C3-C4`));
+    const lines = await linesOf(keysVerb, words(`${input} --voice A2-E4 --comfort C3-C4`));
     expect(lines).toHaveLength(12);
     for (const line of lines) expect(Object.keys(line)).toEqual(fields);
     expect(lines[0]).toMatchObject({ beyond: false, parts: { comfort: 50 } });
@@ -26,25 +27,25 @@ test("keys prints a line a key with the agreed fields, best first", async () => 
 });
 
 test("without a comfort band two semitones above and one below are kept", async () => {
-  const given = await keysVerb.run(words("--span C4-C5 --home C --voice E2-E4 --comfort F2-D4"));
-  expect(await keysVerb.run(words("--span C4-C5 --home C --voice E2-E4"))).toEqual(given);
+  const given = await linesOf(keysVerb, words("--span C4-C5 --home C --voice E2-E4 --comfort F2-D4"));
+  expect(await linesOf(keysVerb, words("--span C4-C5 --home C --voice E2-E4"))).toEqual(given);
 });
 
 test("shapes prints a line a shape, easiest first", async () => {
-  const lines = await shapesVerb.run(words("C --tuning A3,D4,F#4"));
+  const lines = await linesOf(shapesVerb, words("C --tuning A3,D4,F#4"));
   expect(lines[0]).toMatchObject({ frets: [3, 2, 1], fingers: [3, 2, 1], barre: null });
   expect(Object.keys(lines[0]!)).toEqual(["frets", "fingers", "barre", "reachMm", "ease"]);
-  expect((await shapesVerb.run(words("C --tuning A3,D4,F♯4 --frets 9"))).length).toBeLessThan(lines.length);
-  const all = await shapesVerb.run(words("C --tuning G4,C4,E4,A4 --scale 432 --all"));
-  expect(all.length).toBeGreaterThan((await shapesVerb.run(words("C --tuning G4,C4,E4,A4 --scale 432"))).length);
+  expect((await linesOf(shapesVerb, words("C --tuning A3,D4,F♯4 --frets 9"))).length).toBeLessThan(lines.length);
+  const all = await linesOf(shapesVerb, words("C --tuning G4,C4,E4,A4 --scale 432 --all"));
+  expect(all.length).toBeGreaterThan((await linesOf(shapesVerb, words("C --tuning G4,C4,E4,A4 --scale 432"))).length);
 });
 
 test("ways finds the key of the chart, and takes another when told", async () => {
-  const lines = await waysVerb.run(words(`${join(folder, "slip.txt")} --to C --instrument box-adf`));
+  const lines = await linesOf(waysVerb, words(`${join(folder, "slip.txt")} --to C --instrument box-adf`));
   const fields = ["retune", "capo", "shapeKey", "soundingKey", "chords", "difficulty", "cautions", "why"];
   for (const line of lines) expect(Object.keys(line)).toEqual(fields);
   expect(lines).toContainEqual(expect.objectContaining({ retune: -2, capo: 0, shapeKey: "D", soundingKey: "C" }));
-  const told = await waysVerb.run(words(`${join(folder, "slip.txt")} --to C --instrument box-adf --from G`));
+  const told = await linesOf(waysVerb, words(`${join(folder, "slip.txt")} --to C --instrument box-adf --from G`));
   const asIs = told.find((line) => "retune" in line && line.retune === 0 && "capo" in line && line.capo === 0);
   expect(asIs).toMatchObject({
     chords: expect.arrayContaining([expect.objectContaining({ written: "D", played: "G" })]),
@@ -52,7 +53,7 @@ test("ways finds the key of the chart, and takes another when told", async () =>
 });
 
 test("instruments and tension print a line each, strings low to high", async () => {
-  expect(await instrumentsVerb.run([])).toContainEqual({
+  expect(await linesOf(instrumentsVerb, [])).toContainEqual({
     id: "box-adf",
     name: "Box guitar, A-D-F♯",
     strings: ["A3", "D4", "F#4"],
@@ -60,7 +61,7 @@ test("instruments and tension print a line each, strings low to high", async () 
     frets: 20,
   });
   // D'Addario's chart 13934: a 10-46 set, nickel-plated there, so the plain strings are compared.
-  const lines = await tensionVerb.run(words("--instrument guitar --shift -2 --gauges .046,.036,.026,.017,.013,.010"));
+  const lines = await linesOf(tensionVerb, words("--instrument guitar --shift -2 --gauges .046,.036,.026,.017,.013,.010"));
   expect(lines).toHaveLength(6);
   expect(lines[5]).toEqual({ string: "E4", gauge: 0.01, beforeLb: 16.2, afterLb: 12.86, verdict: "fine" });
 });
@@ -84,13 +85,17 @@ const cases: [string, Verb, string][] = [
   ["no file", waysVerb, "--to C --instrument guitar"],
 ];
 test.each(cases)("%s is bad input, said in one line", async (_, verb, line) => {
-  const refused = verb.run(words(line));
+  const refused = linesOf(verb, words(line));
   await expect(refused).rejects.toBeInstanceOf(BadInput);
   await expect(refused).rejects.toThrow(/^[^\n]{10,}\.$/);
 });
 
+test("keys without a tune says both ways to give one", async () => {
+  await expect(linesOf(keysVerb, words("--voice E2-E4"))).rejects.toThrow(/--melody FILE, or --span LOW-HIGH --home/);
+});
+
 test("a chart without chords and a key that is none are bad input", async () => {
-  const run = (file: string, rest: string) => waysVerb.run(words(`${join(folder, file)} ${rest}`));
+  const run = (file: string, rest: string) => linesOf(waysVerb, words(`${join(folder, file)} ${rest}`));
   await expect(run("prose.txt", "--to C --instrument guitar")).rejects.toThrow("prose.txt holds no chords.");
   await expect(run("slip.txt", "--to Q --instrument guitar")).rejects.toThrow('not "Q".');
 });

@@ -9,8 +9,9 @@ import { chartChords, parseChart } from "../../shared/songs/chart";
 import { findKey } from "../../shared/songs/findKey";
 import { findShapes } from "../../shared/ways/findShapes";
 import { findWays } from "../../shared/ways/findWays";
+import { readInput, songSize } from "./inputFile";
 import { BadInput, type Verb } from "./verb";
-import { readBytes, readKey, readOptions, readWhole, required } from "./verbOptions";
+import { readKey, readOptions, readWhole, required } from "./verbOptions";
 
 /** Scale of a six-string guitar, 25.5 in, where none is given. */
 const usualScaleMm = 647.7;
@@ -59,7 +60,7 @@ export const waysVerb: Verb = {
     const [path, extra] = rest;
     if (path === undefined || extra !== undefined) throw new BadInput("ways wants one chart file.");
     const instrument = readInstrument(required(values.instrument, "instrument"));
-    const chart = parseChart(new TextDecoder().decode(await readBytes(path)));
+    const chart = parseChart(new TextDecoder().decode(await readInput(path, songSize)));
     const chords = chartChords(chart);
     if (chords.length === 0) throw new BadInput(`${basename(path)} holds no chords.`);
     const from = values.from === undefined ? findKey({ chart })?.key : readKey(values.from, "from");

@@ -1,4 +1,4 @@
-/** The addresses that the web client knows; every other page answers 404. ":id" stands for one segment. */
+/** The addresses that the web client knows; every other page answers 404. ":id" stands for the id of a song. */
 export const clientRoutes = [
   "/",
   "/voice",
@@ -18,7 +18,8 @@ export const clientRoutes = [
   "/account/sign-up",
 ] as const;
 
-const patterns = clientRoutes.map((route) => new RegExp(`^${route.replaceAll(":id", "[^/]+")}/?$`));
+const id = "[0-9a-fA-F]{8}(?:-[0-9a-fA-F]{4}){3}-[0-9a-fA-F]{12}";
+const patterns = clientRoutes.map((route) => new RegExp(`^${route.replaceAll(":id", id)}/?$`));
 
 export function isClientRoute(path: string): boolean {
   return patterns.some((pattern) => pattern.test(path));

@@ -1,4 +1,5 @@
 import type { ErrorRequestHandler, RequestHandler } from "express";
+import type { Api } from "./api";
 import { databaseProblem } from "./databaseProblem";
 import { HttpProblem } from "./httpProblem";
 
@@ -7,10 +8,22 @@ interface BodyParserError extends Error {
   status: number;
 }
 
-/** Every address under /api that no route knows. */
-export const unknownRoute: RequestHandler = (req) => {
-  throw new HttpProblem(404, "not-found", `There is nothing at ${req.method} ${req.baseUrl}${req.path}.`);
-};
+/** Every address under /api that no route knows, and every method that a known one does not have. */
+export function unknownRoute({ operations }: Pick<Api, "operations">): RequestHandler {
+  const patterns = operations.map(({ method, path }) => ({
+    method: method.toUpperCase(),
+    path: new RegExp(`^${path.replace(/:\w+/g, "[^/]+")}/?$`, "i"),
+  }));
+  return (req) => {
+    const known = patterns.filter(({ path }) => path.test(req.path)).map(({ method }) => method);
+    if (known.length === 0)
+      throw new HttpProblem(404, "not-found", `There is nothing at ${req.method} ${req.baseUrl}${req.path}.`);
+    const allowed = [...new Set(known.flatMap((method) => (method === "GET" ? ["GET", "HEAD"] : [method])))].join(", ");
+    throw new HttpProblem(405, "method-not-allowed", `${req.baseUrl}${req.path} takes ${allowed}.`, undefined, {
+      Allow: allowed,
+    });
+  };
+}
 
 /** The one place where an error becomes an answer. What it does not know is logged and told as a 500 without details. */
 export const errorHandler: ErrorRequestHandler = (error: unknown, req, res, next) => {

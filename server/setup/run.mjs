@@ -73,7 +73,7 @@ const commands = {
   async engine() {
     await ensurePackages({ root, say });
     const args = [...typescript, path.join(root, "server", "cli", "engine.ts"), ...process.argv.slice(3)];
-    await together([{ args, env: {}, cwd: process.env.INIT_CWD }]);
+    await together([{ args, env: {}, cwd: process.env.INIT_CWD ?? process.cwd() }]);
   },
 
   async "bench:voice"() {

@@ -60,6 +60,7 @@ describe("a voice known from a phrase", () => {
       "50 % of the tune lies over what you have sung so far, up to B4; it is probably within reach (estimate).",
     ],
     ["E3 B3 C4 D4 E4 B4", "17 % of the tune lies below what you probably reach (E3)."],
+    ["E3 C4 D4 E4 C5 C5", "33 % of the tune lies above what you probably reach (C5), 17 % below it (E3)."],
   ])("the notes %s are told as heard, probable or beyond", (names, reason) => {
     expect(reasonIn(names, phrase)).toBe(reason);
   });

@@ -114,7 +114,7 @@ function KeyCard({ row, voice }: { row: KeyRow; voice: SingingVoice }) {
           {" of 100"}
         </Text>
       </View>
-      <Text variant="strong" style={{ marginTop: 12, lineHeight: 21, minHeight: 42 }}>
+      <Text variant="strong" style={{ marginTop: 12, lineHeight: 21, minHeight: 63 }}>
         {row.reason}
       </Text>
       <View style={{ flexDirection: "row", flexWrap: "wrap", gap: 14, alignItems: "stretch", marginTop: 6 }}>

@@ -26,6 +26,8 @@ export interface KeyTableProps {
 }
 
 const perSemitone = 14.4;
+/** Where there are no ways to show, the pictures may take their room. */
+const perSemitoneAlone = 24;
 
 /** The keys as rows: scores, spans on one scale, room, chords and the best way. One of them is chosen by its radio button. */
 export function KeyTable({
@@ -42,7 +44,8 @@ export function KeyTable({
   const group = useId();
   const columns = tableColumns(useWindowDimensions().width - sizes.rail - 2 * sizes.gutterWide, instrument !== null);
   const scale = commonScale(rows, voice);
-  const step = Math.min(perSemitone, (columns.span / keySpanWidth(scale, perSemitone)) * perSemitone);
+  const most = columns.chords === "none" ? perSemitoneAlone : perSemitone;
+  const step = Math.min(most, columns.span / keySpanWidth(scale, 1));
   const head = { ...cell, ...th, top: 0 };
   const sortBy = (by: KeyOrder, label: ReactNode, align: "left" | "center" = "left") => (
     <button type="button" onClick={() => onOrder(by)} style={{ ...sorter, textAlign: align }}>

@@ -138,16 +138,19 @@ function Chords({ names, on, color }: { names: readonly string[]; on: boolean; c
     <div
       data-mono
       style={{
-        display: "grid",
-        gridTemplateColumns: "repeat(4, minmax(36px, max-content))",
-        columnGap: 4,
+        display: "flex",
+        flexWrap: "wrap",
+        columnGap: 8,
+        paddingRight: 8,
         font: `${on ? 600 : 400} 14px/18px ${fonts.mono}`,
         color,
         whiteSpace: "nowrap",
       }}
     >
       {names.map((chord) => (
-        <span key={chord}>{setSigns(chord)}</span>
+        <span key={chord} style={{ minWidth: 30 }}>
+          {setSigns(chord)}
+        </span>
       ))}
     </div>
   );

@@ -96,9 +96,11 @@ export function KeysScreen({ song, keys, pending, voice, wayOf, instrument }: Ke
         <>
           <ReachLine voice={keys.voice} voiceId={voice?.id ?? null} />
           {keys.noFit !== null && (
-            <Notice kind="caution" testID="no-key-fits">
-              {keys.noFit}
-            </Notice>
+            <View style={{ marginBottom: 10 }}>
+              <Notice kind="caution" testID="no-key-fits">
+                {keys.noFit}
+              </Notice>
+            </View>
           )}
           {selected.coarse && (
             <Text variant="small" tone="soft" style={{ marginBottom: 8 }}>

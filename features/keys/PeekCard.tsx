@@ -32,7 +32,7 @@ export function PeekCard({ row, voice, side, roomy }: PeekCardProps) {
     <Card
       style={{ flexGrow: 1, padding: 0, alignItems: side === "left" ? "flex-start" : "flex-end", overflow: "hidden" }}
     >
-      <View style={{ width, alignItems: "center", paddingTop: 18, height: 120 }}>
+      <View style={{ width, alignItems: "center", paddingTop: 18, height: 141 }}>
         <KeySign of={row.key} size={row.key.mode === "minor" && row.sign.length > 2 ? 15 : 20} stacked={!roomy} />
         <Text variant="mono" tone="soft" style={{ fontSize: 12, lineHeight: 18 }}>
           {row.score}

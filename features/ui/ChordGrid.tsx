@@ -128,6 +128,8 @@ export function ChordGrid({
         viewBox={`0 0 ${right + 10} ${bottom + 3}`}
         role="img"
         aria-label={words}
+        // Names such as 13½ reach out to the left.
+        style={webStyle({ overflow: "visible" })}
       >
         {Array.from({ length: window.rows + 1 }, (_, row) => row)
           .slice(upTheNeck ? 0 : 1)
@@ -190,7 +192,7 @@ export function ChordGrid({
         {named.map((fret) => (
           <SvgLabel
             key={fret}
-            x={12}
+            x={9}
             y={fretY(fret, window, top, size) + 4}
             size={fret === window.first ? 12 : 11}
             family="display"

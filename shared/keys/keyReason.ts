@@ -32,21 +32,19 @@ export function keyReason(facts: KeyFacts, edges: VoiceEdges): string {
 function beyondSentence({ marks, spelling, coarse }: KeyFacts, edges: VoiceEdges): string {
   const above = marks.filter(({ midi }) => midi > edges.rangeHigh);
   const below = marks.filter(({ midi }) => midi < edges.rangeLow);
-  const clause = (beyond: readonly KeyMark[], where: "above" | "below") => {
-    const estimated = where === "above" ? edges.heardHigh < edges.rangeHigh : edges.heardLow > edges.rangeLow;
-    return `lies ${where} ${estimated ? "what you probably reach" : "your range"} (${noteList(beyond, spelling)})`;
-  };
-  if (coarse) {
-    const sides = [above.length > 0 ? clause(above, "above") : "", below.length > 0 ? clause(below, "below") : ""];
-    return `Part of the tune ${sides.filter(Boolean).join(" and part ")}.`;
-  }
-  const parts = [
-    ...(above.length > 0 ? [[above, "above"] as const] : []),
-    ...(below.length > 0 ? [[below, "below"] as const] : []),
-  ].sort(([a], [b]) => shareOf(b) - shareOf(a));
-  const [first, second] = parts;
-  const opening = `${percent(shareOf(first![0]))} of the tune ${clause(first![0], first![1])}`;
-  return second ? `${opening}, ${percent(shareOf(second[0]))} ${clause(second[0], second[1])}.` : `${opening}.`;
+  const sides = [
+    ...(above.length > 0 ? [{ out: above, where: "above", estimated: edges.heardHigh < edges.rangeHigh }] : []),
+    ...(below.length > 0 ? [{ out: below, where: "below", estimated: edges.heardLow > edges.rangeLow }] : []),
+  ];
+  if (!coarse) sides.sort((a, b) => shareOf(b.out) - shareOf(a.out));
+  const [first, second] = sides;
+  const limit = (estimated: boolean) => (estimated ? "what you probably reach" : "your range");
+  const amount = coarse ? "Part" : percent(shareOf(first!.out));
+  const opening = `${amount} of the tune lies ${first!.where} ${limit(first!.estimated)} (${noteList(first!.out, spelling)})`;
+  if (!second) return `${opening}.`;
+  const rest = coarse ? " and part" : `, ${percent(shareOf(second.out)).toLowerCase()}`;
+  const same = second.estimated === first!.estimated;
+  return `${opening}${rest} ${second.where} ${same ? "it" : limit(second.estimated)} (${noteList(second.out, spelling)}).`;
 }
 
 function insideSentence({ marks, parts, spelling, coarse }: KeyFacts, edges: VoiceEdges): string {

@@ -40,6 +40,7 @@ function screens(ferry: string): [path: string, ready: (page: Page) => Promise<u
     ["/", heading],
     ["/voice", (page) => page.getByTestId("take-row").first().waitFor()],
     ["/voice/sing", (page) => page.getByTestId("sing-start").waitFor()],
+    ["/voice/guided", heading],
     ["/voice/upload", (page) => page.getByTestId("upload-choose").waitFor()],
     ["/voice/by-hand", (page) => page.getByTestId("by-hand-lowest").waitFor()],
     ["/songs", (page) => page.getByText("Lantern on the Slipway").waitFor()],

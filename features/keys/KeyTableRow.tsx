@@ -72,7 +72,13 @@ export function KeyTableRow({ row, group, on, onSelect, chords, way, mark, child
               </>
             )}
           </span>
-          <span style={{ font: `500 12px/13px ${fonts.text}`, color: colors.inkSoft, flex: "1 1 40px" }}>
+          <span
+            style={{
+              font: `500 12px/13px ${fonts.text}`,
+              color: colors.inkSoft,
+              flex: parts.mode === "" ? "1 1 40px" : "1 0 100%",
+            }}
+          >
             {row.moved}
           </span>
         </span>

@@ -40,6 +40,11 @@ test("a row names its key from the written one, with glyphs", () => {
   expect(rows[1]?.span).toBe("A♭3 to B♭4");
 });
 
+test("the written key in another octave says so", () => {
+  const moved = (shift: number) => keyRows([score(shift, 90, { lower: 1, upper: 1 })], inG, () => [])[0]?.moved;
+  expect([0, -12, -24].map(moved)).toEqual(["written", "written, an octave down", "written, 2 octaves down"]);
+});
+
 test("room shows semitones, a narrow rest and what lies beyond", () => {
   expect(rows[2]?.below).toEqual({ semitones: 1, text: "1", tone: "honey" });
   expect(rows[3]?.above).toEqual({ semitones: -2, text: "▲ 2", tone: "brick" });

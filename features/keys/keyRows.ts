@@ -62,7 +62,7 @@ export function keyRows(
       key,
       sign,
       shift: score.shift,
-      moved: shortMove(score.shift),
+      moved: movedWords(score.shift),
       score: points,
       parts: score.parts,
       reason,
@@ -135,6 +135,11 @@ export function noFitWords(rows: readonly KeyRow[]): string | null {
 /** How notes are spelled in a key. */
 export function spellingIn(key: KeyName): "sharps" | "flats" {
   return keyFifths(key) < 0 ? "flats" : "sharps";
+}
+
+/** The written key in another octave is still the written one. */
+function movedWords(shift: number): string {
+  return shift !== 0 && shift % 12 === 0 ? `written, ${shortMove(shift)}` : shortMove(shift);
 }
 
 function spanWords(score: KeyScore, key: KeyName): string {

@@ -45,16 +45,16 @@ export function moveWords(semitones: number): string {
 }
 
 /**
- * The same in as few signs as a table column wants. Whole octaves keep the written key, and say so.
+ * The same in as few signs as a table column wants.
  *
  * @param semitones whole semitones from the written key; negative = lower
- * @returns such as "7 down", "2 up", "written" or "written, an octave down"
+ * @returns such as "7 down", "2 up", "written" or "an octave down"
  * @throws RangeError if semitones is not a whole number
  * @example shortMove(-7) // => "7 down"
  */
 export function shortMove(semitones: number): string {
   if (!Number.isInteger(semitones)) throw new RangeError("a distance in words needs whole semitones");
   if (semitones === 0) return "written";
-  if (semitones % 12 === 0) return `written, ${distanceWords(semitones)} ${semitones < 0 ? "down" : "up"}`;
+  if (semitones % 12 === 0) return `${distanceWords(semitones)} ${semitones < 0 ? "down" : "up"}`;
   return `${Math.abs(semitones)} ${semitones < 0 ? "down" : "up"}`;
 }

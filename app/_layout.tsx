@@ -1,9 +1,10 @@
 import { QueryClientProvider } from "@tanstack/react-query";
-import { Slot } from "expo-router";
+import { Navigator, usePathname } from "expo-router";
 import { useEffect } from "react";
 import { queryClient } from "@/features/api/queryClient";
 import { SessionProvider, useSession } from "@/features/api/SessionProvider";
 import { fetchWhenIdle, type LazyPart } from "@/features/ui/fetchWhenIdle";
+import { MissingChunkBoundary } from "@/features/ui/MissingChunkBoundary";
 import { Shell } from "@/features/ui/Shell";
 import { ThemeProvider } from "@/features/ui/ThemeProvider";
 
@@ -17,7 +18,6 @@ const parts: LazyPart[] = [
   () => import("@/shared/ways/findWays"),
   () => import("./songs/[id]/edit"),
   () => import("./songs/new"),
-  () => import("@/shared/songs/melodyFile"),
   () => import("./voice/index"),
   () => import("./voice/sing"),
   () => import("./voice/guided"),
@@ -29,14 +29,20 @@ const parts: LazyPart[] = [
   () => import("./account/sign-in"),
   () => import("./account/sign-up"),
   () => import("./+not-found"),
+  () => import("@/shared/songs/melodyFile"),
 ];
 
 function Surroundings() {
   const { account } = useSession();
+  const path = usePathname();
   useEffect(() => fetchWhenIdle(parts), []);
   return (
     <Shell initial={account ? account.email.charAt(0).toUpperCase() : null}>
-      <Slot />
+      <Navigator>
+        <MissingChunkBoundary path={path}>
+          <Navigator.Slot />
+        </MissingChunkBoundary>
+      </Navigator>
     </Shell>
   );
 }

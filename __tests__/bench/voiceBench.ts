@@ -3,7 +3,7 @@ import { tmpdir } from "node:os";
 import { join, resolve } from "node:path";
 import { parseArgs } from "node:util";
 import { corpus } from "../sound/corpus";
-import type { Clip } from "../sound/corpusClip";
+import { reseedCorpus, type Clip } from "../sound/corpusClip";
 import { writeWav } from "../sound/wavFile";
 import { barsTable, comparisonTable, measuresTable, type TableRow } from "./benchTable";
 import { folderClips, type BenchClip } from "./folderClips";
@@ -11,7 +11,7 @@ import { rangeByExtremes, rangeByHeldNotes } from "./heldNotes";
 import { aubioYinFft, ours, plainPitchy, praatAutocorrelation, type Tool } from "./plainTools";
 import { countFrames, rangeErrors, rangeRight, type Scored } from "./scoring";
 
-const USAGE = "bench:voice [--dev] [--held-out] [--only TAG] [--folder DIR] [--ours] [--failures]";
+const USAGE = "bench:voice [--dev] [--held-out] [--seed N] [--only TAG] [--folder DIR] [--ours] [--failures]";
 const CONDITIONS = [
   "clean",
   "noise20",
@@ -51,6 +51,7 @@ else {
 interface Options {
   dev?: boolean;
   "held-out"?: boolean;
+  seed?: string;
   only?: string;
   folder?: string;
   ours?: boolean;
@@ -62,8 +63,19 @@ function readOptions(): Options | null {
   const flag = { type: "boolean" } as const;
   const text = { type: "string" } as const;
   try {
-    const known = { dev: flag, "held-out": flag, only: text, folder: text, ours: flag, failures: flag, help: flag };
-    return parseArgs({ options: known }).values as Options;
+    const known = {
+      dev: flag,
+      "held-out": flag,
+      seed: text,
+      only: text,
+      folder: text,
+      ours: flag,
+      failures: flag,
+      help: flag,
+    };
+    const options: Options = parseArgs({ options: known }).values;
+    if (options.seed !== undefined && !/^\d{1,15}$/.test(options.seed)) throw new Error("--seed takes a whole number.");
+    return options;
   } catch (error) {
     process.stderr.write(`${(error as Error).message}\n`);
     process.exitCode = 2;
@@ -72,7 +84,8 @@ function readOptions(): Options | null {
 }
 
 async function measure(options: Options): Promise<void> {
-  const { folder: from, only } = options;
+  const { folder: from, only, seed } = options;
+  if (seed !== undefined) reseedCorpus(Number(seed));
   const wanted = ({ name, tags }: { name: string; tags: string[] }): boolean =>
     !only || tags.includes(only) || name === only;
   const clips = from

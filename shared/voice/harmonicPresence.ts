@@ -32,14 +32,18 @@ export function harmonicPresence(r: Float32Array, hz: number): number {
   return presence;
 }
 
-/** Mean presence of the harmonics between the multiples of `every`, against the slope from multiple to multiple. */
+/**
+ * Mean presence of the harmonics between the multiples of `every`, against the slope from multiple to multiple. What lies
+ * above the last multiple tells nothing: it may be missing because it is weak, as over a formant.
+ */
 function between(power: Float32Array, count: number, every: number, least: number): number {
   let sum = 0;
   let weight = 0;
-  for (let h = 1; h <= count; h++) {
+  const last = count - (count % every);
+  for (let h = 1; h < last; h++) {
     if (h % every === 0) continue;
     const below = power[h - (h % every)]!;
-    const above = h - (h % every) + every <= count ? power[h - (h % every) + every]! : below;
+    const above = power[h - (h % every) + every]!;
     const share = (h % every) / every;
     const expected = h < every ? above : Math.max(below, 1e-3 * above) ** (1 - share) * Math.max(above, 1e-3 * below) ** share;
     if (expected < least && power[h]! < least) continue;

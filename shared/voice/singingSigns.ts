@@ -30,8 +30,16 @@ const FLUTTER_CENTS = 0.6;
 const FLUTTER_REACH = 4;
 /** Two notes nearer than this, in semitones, may be the same pitch sung twice. */
 const SAME_PITCH = 0.75;
-const WHISTLE_FROM_MIDI = 79;
-const PURE_BELOW_DB = -27;
+/** Lips hardly whistle lower than this; a singer up there comes down below it in nearly every line. */
+const WHISTLE_FROM_MIDI = 76;
+/**
+ * Second harmonic against the first. A voice nearly as pure as a whistle on one vowel is not so on the next, so that
+ * three quarters of the frames must be pure.
+ */
+const PURE_BELOW_DB = -24;
+const PURE_SHARE = 0.75;
+/** A second harmonic this far over the first is a whistle above the search limit, followed an octave too low. */
+const OCTAVE_LOW_DB = 20;
 
 /**
  * Gathers the signs from a tracked take.
@@ -47,8 +55,6 @@ export function findSigns(frames: readonly TrackFrame[], notes: readonly HeardNo
   const top = levels[Math.floor(levels.length * 0.95)] ?? -Infinity;
   const loud = frames.filter((f) => f.levelDb > top - LOUD_WITHIN_DB);
   const of = (test: (f: TrackFrame) => boolean): number => (loud.length === 0 ? 0 : loud.filter(test).length / loud.length);
-  const high = frames.flatMap((f) => (f.overtoneDb === null ? [] : [f.overtoneDb]));
-  const middle = weightedQuantile(clear.map((n) => ({ value: n.midi, weight: n.heldS })), 0.5);
   return {
     heldS,
     voicedShare: of((f) => f.hz !== null),
@@ -56,8 +62,13 @@ export function findSigns(frames: readonly TrackFrame[], notes: readonly HeardNo
     pitches: countPitches(clear),
     speechLikeness: likenessToSpeech(frames, clear, top - LOUD_WITHIN_DB),
     still: clear.length > 0 && median(clear.map((n) => n.steadinessCents)) < STILL_CENTS && flutter(frames, clear) < FLUTTER_CENTS,
-    whistled: middle >= WHISTLE_FROM_MIDI && high.length > 0 && median(high) < PURE_BELOW_DB,
+    whistled: clear.length > 0 && clear.every((n) => n.midi >= WHISTLE_FROM_MIDI) && isPure(frames),
   };
+}
+
+function isPure(frames: readonly TrackFrame[]): boolean {
+  const overtones = frames.flatMap(({ overtoneDb }) => (overtoneDb === null || overtoneDb > OCTAVE_LOW_DB ? [] : [{ value: overtoneDb, weight: 1 }]));
+  return overtones.length > 0 && weightedQuantile(overtones, PURE_SHARE) < PURE_BELOW_DB;
 }
 
 function countPitches(notes: readonly HeardNote[]): number {

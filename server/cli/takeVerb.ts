@@ -1,7 +1,6 @@
 import { listenToTake } from "../../shared/voice/listenToTake";
-import type { TakeReport } from "../../shared/voice/takeReport";
 import { readRecording } from "./recordingFile";
-import type { Verdict } from "../../shared/voice/takeReport";
+import type { TakeReport, Verdict } from "../../shared/voice/takeReport";
 import { BadInput, eachFile, type Verb } from "./verb";
 import type { Recording } from "./wavPcm";
 import { readOptions } from "./verbOptions";

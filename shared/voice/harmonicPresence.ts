@@ -18,32 +18,34 @@ const lagWindow = Float32Array.from({ length: MAX_LAG + 1 }, (_, lag) => (lag ==
  *
  * @param r autocorrelation of the frame with the room subtracted, shape [141]
  * @param hz the pitch in question
+ * @param enclosed leaves out what lies above the last multiple: there a harmonic may be weak only because the sound ends,
+ *   as above a formant, which a choice between candidates can bear and a verdict on the sound cannot
  * @returns 0 (those between are missing) to 1 (all are there); 1 where too few harmonics fit to tell
  * @see the Wiener-Khinchin theorem: the spectrum is the cosine transform of the autocorrelation
  */
-export function harmonicPresence(r: Float32Array, hz: number): number {
+export function harmonicPresence(r: Float32Array, hz: number, enclosed = false): number {
   const count = Math.min(MOST_HARMONICS, Math.floor(HIGHEST_HARMONIC_HZ / hz));
   if (count < 3 || !(r[0]! > 0)) return 1;
   const power = new Float32Array(count + 2);
   for (let h = 1; h <= count; h++) power[h] = Math.max(0, powerAt(r, h * hz));
   const least = LEAST_SHARE * MAX_LAG * 0.5 * Math.max(0, r[0]!);
   let presence = 1;
-  for (const every of [2, 3, 5, 7]) if (every < count) presence = Math.min(presence, between(power, count, every, least));
+  for (const every of [2, 3, 5, 7]) if (every < count) presence = Math.min(presence, between(power, count, every, least, enclosed));
   return presence;
 }
 
 /**
- * Mean presence of the harmonics between the multiples of `every`, against the slope from multiple to multiple. What lies
- * above the last multiple tells nothing: it may be missing because it is weak, as over a formant.
+ * Mean presence of the harmonics between the multiples of `every`, against the slope from multiple to multiple, and
+ * above the last multiple against that one, unless only those enclosed are asked for.
  */
-function between(power: Float32Array, count: number, every: number, least: number): number {
+function between(power: Float32Array, count: number, every: number, least: number, enclosed: boolean): number {
   let sum = 0;
   let weight = 0;
-  const last = count - (count % every);
-  for (let h = 1; h < last; h++) {
+  const last = enclosed ? count - (count % every) : count;
+  for (let h = 1; h <= last; h++) {
     if (h % every === 0) continue;
     const below = power[h - (h % every)]!;
-    const above = power[h - (h % every) + every]!;
+    const above = h - (h % every) + every <= count ? power[h - (h % every) + every]! : below;
     const share = (h % every) / every;
     const expected = h < every ? above : Math.max(below, 1e-3 * above) ** (1 - share) * Math.max(above, 1e-3 * below) ** share;
     if (expected < least && power[h]! < least) continue;

@@ -17,6 +17,8 @@ const CLEAR_ENOUGH = 0.8;
 const SHORT_DISCOUNT = 0.96;
 /** A candidate with at least this presence of its harmonics explains a sound as one voice. */
 const WHOLE = 0.4;
+/** A candidate this much less clear than the clearest explains the sound less well. */
+const BEHIND = 0.12;
 /** Candidates above the search limit are kept for the path to choose, so that a whistle does not pass for its octave below. */
 const DECOY_HZ = 2000;
 
@@ -71,7 +73,7 @@ export function findCandidates(frame: LagFrame, room: RoomFloor, short: () => La
   boundMultiples(out.candidates);
   const whole = out.candidates.filter((c) => c.presence >= WHOLE).reduce((top, c) => Math.max(top, c.clarity), 0);
   const any = out.candidates.reduce((top, c) => Math.max(top, c.clarity), 0);
-  out.mixed = any > 0.6 && whole < any - 0.12;
+  out.mixed = any > 0.6 && whole < any - BEHIND && !out.candidates.some((c) => c.clarity >= any - BEHIND && harmonicPresence(r, c.hz, true) >= WHOLE);
   return out;
 }
 

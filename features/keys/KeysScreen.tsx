@@ -155,9 +155,6 @@ export function KeysScreen({ song, keys, pending, voice, wayOf, instrument }: Ke
                   style={{ marginTop: 12 }}
                 />
               )}
-              <Text variant="small" tone="soft" testID="room-words" style={{ marginTop: 8 }}>
-                {roomWords(selected)}
-              </Text>
               <KeyList
                 rows={rows}
                 voice={keys.voice}
@@ -165,6 +162,9 @@ export function KeysScreen({ song, keys, pending, voice, wayOf, instrument }: Ke
                 onSelect={(row) => setChosen(row.shift)}
                 markOf={markOf}
               />
+              <Text variant="small" tone="soft" testID="room-words" style={{ marginTop: 8 }}>
+                {roomWords(selected)}
+              </Text>
             </>
           )}
           {decision && (

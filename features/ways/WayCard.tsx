@@ -26,7 +26,7 @@ export interface WayCardProps {
 export function WayCard({ way, instrument, chosen, radio, onChoose }: WayCardProps) {
   const id = useId();
   const moved = way.retune !== 0 || way.capo !== 0;
-  const column = Math.max(84, gridWidth(instrument.strings.length) + 8);
+  const column = Math.max(80, gridWidth(instrument.strings.length) + 8);
   const lines = Math.max(1, ...way.chords.map(({ played }) => nameLines(glyphs(played)).length));
   return (
     <>

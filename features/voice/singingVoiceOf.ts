@@ -2,14 +2,13 @@ import type { Take } from "@/shared/contract/take";
 import type { Voice } from "@/shared/contract/voice";
 import type { SingingVoice } from "@/shared/keys/keyScore";
 import type { PitchBand } from "@/shared/voice/takeReport";
-import { voiceOfTakes, type ShownTake } from "@/shared/voice/voiceOfTakes";
-import type { VoiceProfile } from "@/shared/voice/voiceProfile";
+import { mergeTakes, type ProfileTake, type VoiceProfile } from "@/shared/voice/voiceProfile";
 import { inTune } from "./takeOfHeard";
 
 /** What the takes of one voice say together; null where it has none. Takes of other voices are left out. */
 export function profileOf(voice: Pick<Voice, "id">, takes: readonly Take[]): VoiceProfile | null {
   const own = takes.filter((take) => take.voiceId === voice.id);
-  return own.length === 0 ? null : voiceOfTakes(own.map(shownTake));
+  return own.length === 0 ? null : mergeTakes(own.map(shownTake));
 }
 
 /** The voice as the key scorer needs it: notes set by hand, else what the takes say, else null. Comfort lies inside range. */
@@ -37,7 +36,7 @@ export function keyVoiceOf(voice: Voice, takes: readonly Take[]): SingingVoice |
 }
 
 /** A take as the engine merges it, its notes named by the singer's own tuning. */
-export function shownTake(take: Take): ShownTake {
+export function shownTake(take: Take): ProfileTake {
   const { id, sungAt, certainty, effort, tuningCents, kind, shows } = take;
   const band = (sung: PitchBand) => inTune(sung, tuningCents);
   return {

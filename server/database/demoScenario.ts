@@ -10,7 +10,7 @@ import { scoreKeys } from "../../shared/keys/scoreKeys";
 import { chartChords, parseChart } from "../../shared/songs/chart";
 import { demoSongs } from "../../shared/songs/demoSongs";
 import { readMelodyFile } from "../../shared/songs/melodyFile";
-import { voiceOfTakes } from "../../shared/voice/voiceOfTakes";
+import { mergeTakes } from "../../shared/voice/voiceProfile";
 import { findWays } from "../../shared/ways/findWays";
 import { hashPassword } from "../auth/passwords";
 import { UserEntity } from "../auth/user.entity";
@@ -146,7 +146,7 @@ function toSong(demo: (typeof demoSongs)[number], createdAt: string): Song {
 
 /** The engine's own answer for this voice and instrument, so that the demonstration shows what the product says. */
 function decide(song: Song, voice: Voice, takes: Take[], instrument: OwnInstrument): Decision | null {
-  const profile = voiceOfTakes(takes.map((take) => ({ ...take, hold: take.kind === "hold" })));
+  const profile = mergeTakes(takes.map((take) => ({ ...take, hold: take.kind === "hold" })));
   const { tune, writtenKey } = song;
   if (!profile || !tune || !writtenKey) return null;
   const [key] = scoreKeys(tune, profile, { mode: writtenKey.mode, presentKey: writtenKey.tonic });

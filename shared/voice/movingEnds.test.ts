@@ -1,8 +1,8 @@
 import { movingEnds } from "./movingEnds";
-import type { ShownTake } from "./voiceOfTakes";
+import type { ProfileTake } from "./voiceProfile";
 
 const start = Date.parse("2026-09-01T10:00:00.000Z");
-const take = (day: number, low: number, high: number, more: Partial<ShownTake> = {}): ShownTake => ({
+const take = (day: number, low: number, high: number, more: Partial<ProfileTake> = {}): ProfileTake => ({
   id: `${day}-${low}-${high}`,
   sungAt: new Date(start + day * 86_400_000).toISOString(),
   range: { lowMidi: low, highMidi: high },
@@ -27,7 +27,7 @@ test("a guided hold on each side is enough", () => {
   expect(movingEnds(takes)).toEqual([{ end: "low", by: -4, weeks: 6 }]);
 });
 
-test.each<[string, ShownTake[]]>([
+test.each<[string, ProfileTake[]]>([
   ["no takes", []],
   ["one take", [take(0, 57, 77)]],
   ["one low song among the others", [take(0, 57, 77), take(3, 57, 77), take(50, 50, 77), take(56, 57, 77)]],

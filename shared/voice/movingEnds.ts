@@ -1,4 +1,4 @@
-import type { ShownTake } from "./voiceOfTakes";
+import type { ProfileTake } from "./voiceProfile";
 
 /** One end of a voice that lies elsewhere than some weeks ago. */
 export interface MovedEnd {
@@ -26,7 +26,7 @@ const DAY = 86_400_000;
  * @throws RangeError if a take has an unreadable time
  * @see Brown, Morris, Murry, J. Voice 10(3) 1996 (pitch from session to session: up to 2 semitones)
  */
-export function movingEnds(takes: readonly ShownTake[]): MovedEnd[] {
+export function movingEnds(takes: readonly ProfileTake[]): MovedEnd[] {
   const times = takes.map(({ sungAt }) => Date.parse(sungAt));
   if (times.some(Number.isNaN)) throw new RangeError("sungAt must be an ISO time");
   const newest = Math.max(...times);
@@ -34,7 +34,7 @@ export function movingEnds(takes: readonly ShownTake[]): MovedEnd[] {
   return ends.flatMap((end) => movedEnd(takes, newest, end) ?? []);
 }
 
-function movedEnd(takes: readonly ShownTake[], newest: number, end: "low" | "high"): MovedEnd | null {
+function movedEnd(takes: readonly ProfileTake[], newest: number, end: "low" | "high"): MovedEnd | null {
   const side = end === "low" ? -1 : 1;
   const seen = takes
     .filter(({ shows = "both" }) => shows === "both" || shows === end)

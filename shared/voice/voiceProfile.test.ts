@@ -21,9 +21,10 @@ const anyTake = fc
     effort: fc.option(fc.integer({ min: 1, max: 5 })),
     day: fc.integer({ min: 1, max: 28 }),
     hold: fc.boolean(),
+    shows: fc.constantFrom("both" as const, "low" as const, "high" as const),
   })
-  .map(({ id, low, span, certainty, effort, day, hold }) =>
-    take(id, low, low + span, { certainty, effort, hold, sungAt: `2026-02-${String(day).padStart(2, "0")}T10:00:00.000Z` }),
+  .map(({ low, span, day, ...more }) =>
+    take(more.id, low, low + span, { ...more, sungAt: `2026-02-${String(day).padStart(2, "0")}T10:00:00.000Z` }),
   );
 const takes = fc.uniqueArray(anyTake, { selector: (t) => t.id, minLength: 1, maxLength: 8 });
 
@@ -54,7 +55,14 @@ test("a profile holds together: comfort inside range inside estimate, certainty 
   fc.assert(
     fc.property(takes, (list) => {
       const { range, comfort, estimate, certainty } = mergeTakes(list)!;
-      const steps = [estimate.lowMidi, range.lowMidi, comfort.lowMidi, comfort.highMidi, range.highMidi, estimate.highMidi];
+      const steps = [
+        estimate.lowMidi,
+        range.lowMidi,
+        comfort.lowMidi,
+        comfort.highMidi,
+        range.highMidi,
+        estimate.highMidi,
+      ];
       steps.forEach((step, i) => i > 0 && expect(step).toBeGreaterThanOrEqual(steps[i - 1]! - 1e-9));
       expect(certainty).toBeGreaterThanOrEqual(0);
       expect(certainty).toBeLessThanOrEqual(1);
@@ -96,4 +104,59 @@ test("newer takes count more than old ones", () => {
 test("no takes make no profile, and a time that cannot be read is the caller's mistake", () => {
   expect(mergeTakes([])).toBeNull();
   expect(() => mergeTakes([take("a", 45, 60, { sungAt: "yesterday" })])).toThrow(RangeError);
+});
+
+const width = (list: readonly ProfileTake[]) => {
+  const { comfort } = mergeTakes(list)!;
+  return comfort.highMidi - comfort.lowMidi;
+};
+
+test("a harder rating never widens the comfortable band, whatever was said before and whatever else was sung", () => {
+  fc.assert(
+    fc.property(takes, fc.nat(), fc.integer({ min: 3, max: 5 }), (list, turn, harder) => {
+      const rated = list[turn % list.length]!;
+      fc.pre((rated.effort ?? 0) < harder);
+      const after = list.map((one) => (one === rated ? { ...one, effort: harder } : one));
+      const before = list.map((one) => (one === rated && rated.effort === null ? { ...one, effort: null } : one));
+      expect(width(after)).toBeLessThanOrEqual(width(before) + 1e-9);
+    }),
+    { numRuns: 300, seed: 11 },
+  );
+});
+
+test("an easier rating never narrows it", () => {
+  fc.assert(
+    fc.property(takes, fc.nat(), fc.integer({ min: 1, max: 2 }), (list, turn, easier) => {
+      const rated = list[turn % list.length]!;
+      const after = list.map((one) => (one === rated ? { ...one, effort: easier } : one));
+      expect(width(after)).toBeGreaterThanOrEqual(width(list) - 1e-9);
+    }),
+    { numRuns: 300, seed: 12 },
+  );
+});
+
+test("taking a rating back restores the profile bit for bit, and so does erasing a take", () => {
+  fc.assert(
+    fc.property(takes, anyTake, fc.integer({ min: 1, max: 5 }), (list, extra, effort) => {
+      const before = mergeTakes(list);
+      const rated = list.map((one, k) => (k === 0 ? { ...one, effort } : one));
+      expect(mergeTakes(rated.map((one, k) => (k === 0 ? list[0]! : one)))).toEqual(before);
+      expect(mergeTakes([...list, extra].filter((one) => one !== extra))).toEqual(before);
+    }),
+    { numRuns: 60, seed: 13 },
+  );
+});
+
+test("a guided hold that looked for the low end only says nothing about the top", () => {
+  const phrase = take("a", 45, 66);
+  const low = take("h", 40, 55, { hold: true, shows: "low" });
+  const { range, comfort, lowFrom, highFrom } = mergeTakes([phrase, low])!;
+  expect(range).toEqual({ lowMidi: 40, highMidi: 66 });
+  expect([lowFrom, highFrom]).toEqual(["h", "a"]);
+  expect(comfort.highMidi).toBeCloseTo(mergeTakes([phrase])!.comfort.highMidi, 10);
+});
+
+test("an end that was looked for under guidance is no longer estimated, the other one is", () => {
+  const { range, estimate } = mergeTakes([take("a", 45, 66), take("h", 43, 57, { hold: true, shows: "low" })])!;
+  expect(estimate).toEqual({ lowMidi: range.lowMidi, highMidi: 68 });
 });

@@ -27,13 +27,20 @@ export function launchBrowser(microphone: Microphone): Promise<Browser> {
   return chromium.launch({ executablePath: "/usr/bin/chromium", headless: true, args: [...quiet, ...hearing] });
 }
 
+/** One person's browser: its profile, a page, and the errors that the page met. */
+export interface Profile {
+  context: BrowserContext;
+  page: Page;
+  errors: string[];
+}
+
 /** A fresh browser profile, with errors of the page collected. */
 export async function openProfile(
   browser: Browser,
   address: string,
   viewport: Viewport,
   colorScheme: "light" | "dark" = "light",
-): Promise<{ context: BrowserContext; page: Page; errors: string[] }> {
+): Promise<Profile> {
   const context = await browser.newContext({ baseURL: address, viewport: viewports[viewport], colorScheme });
   const page = await context.newPage();
   page.setDefaultTimeout(20_000);

@@ -1,31 +1,17 @@
-import type { Browser, Page } from "playwright-core";
+import type { Page } from "playwright-core";
 import * as sounds from "../sound/noSinging";
 import { singPhrase } from "../sound/singer";
-import { launchBrowser, openProfile } from "./browser";
 import { makeMicrophones } from "./microphone";
-import { startProduct, type Product } from "./product";
+import { setStage } from "./stage";
 import { singFor, sungUpTo } from "./singing";
 
 const rate = 44_100;
 const microphones = makeMicrophones();
-let product: Product;
-let browser: Browser | undefined;
-
-beforeAll(async () => {
-  product = await startProduct();
-}, 60_000);
-afterEach(async () => {
-  await browser?.close();
-  browser = undefined;
-});
-afterAll(async () => {
-  microphones.remove();
-  await product.stop();
-});
+const stage = setStage("fresh");
+afterAll(microphones.remove);
 
 async function open(wav: string) {
-  browser = await launchBrowser({ wav });
-  return openProfile(browser, product.address, "phone");
+  return stage.open({ wav }, "phone");
 }
 
 /** Somebody reading aloud, brought to the microphones' rate; many times too loud where told so. */

@@ -1,25 +1,15 @@
-import type { Browser, Page, Request } from "playwright-core";
-import { launchBrowser, openProfile } from "./browser";
+import type { Page, Request } from "playwright-core";
 import { makeMicrophones } from "./microphone";
-import { startProduct, type Product } from "./product";
+import { setStage } from "./stage";
 import { singFor, sungUpTo } from "./singing";
 
 const microphones = makeMicrophones();
-let product: Product;
-let browser: Browser;
-
-beforeAll(async () => {
-  product = await startProduct();
-  browser = await launchBrowser({ wav: microphones.longVoice(55).wav });
-}, 60_000);
-afterAll(async () => {
-  await browser.close();
-  microphones.remove();
-  await product.stop();
-});
+const song = { wav: microphones.longVoice(55).wav };
+const stage = setStage("kept");
+afterAll(microphones.remove);
 
 test("the count-in is off until it is wanted, is counted for the eyes too, and is remembered", async () => {
-  const { context, page } = await openProfile(browser, product.address, "phone");
+  const { context, page } = await stage.open(song, "phone");
   await page.goto("/voice/sing");
   const wanted = page.getByTestId("count-in");
   expect(await wanted.getAttribute("aria-checked")).toBe("false");
@@ -59,7 +49,7 @@ const shiftOf = (page: Page) =>
   });
 
 test("a take is played back with its trail moving along, trimmed by keys and by hand, and made whole again", async () => {
-  const { context, page, errors } = await openProfile(browser, product.address, "phone");
+  const { context, page, errors } = await stage.open(song, "phone");
   await page.goto("/voice/sing");
   await singFor(page, 9);
   const whole = await page.getByTestId("comfort-notes").textContent();
@@ -96,7 +86,7 @@ test("a take is played back with its trail moving along, trimmed by keys and by 
 });
 
 test("nothing of the sound leaves the page: while it is sung, heard, played, trimmed and kept", async () => {
-  const { context, page } = await openProfile(browser, product.address, "phone");
+  const { context, page } = await stage.open(song, "phone");
   await page.goto("/account/sign-up");
   await page.getByTestId("email").fill("quiet.singer@example.org");
   await page.getByTestId("password").fill("kettle rain window");
@@ -125,7 +115,7 @@ test("nothing of the sound leaves the page: while it is sung, heard, played, tri
   // Addresses carry nothing either, and all stay with this server or in the page itself.
   for (const request of requests) {
     const { protocol, origin, search } = new URL(request.url());
-    expect(protocol === "blob:" || origin === product.address).toBe(true);
+    expect(protocol === "blob:" || origin === new URL(page.url()).origin).toBe(true);
     expect(search.length).toBeLessThan(40);
   }
   const sent = told().map((request) => ({

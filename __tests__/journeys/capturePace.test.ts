@@ -1,7 +1,6 @@
-import type { Browser, Page } from "playwright-core";
-import { launchBrowser, openProfile } from "./browser";
+import type { Page } from "playwright-core";
 import { makeMicrophones } from "./microphone";
-import { startProduct, type Product } from "./product";
+import { setStage } from "./stage";
 import { sungUpTo } from "./singing";
 import { singSynthetically, timeNote, watchLongTasks } from "./syntheticSinger";
 
@@ -12,20 +11,8 @@ const screenBarMs = 80;
 const resultBarMs = 300;
 
 const microphones = makeMicrophones();
-let product: Product;
-let browser: Browser | undefined;
-
-beforeAll(async () => {
-  product = await startProduct();
-}, 60_000);
-afterEach(async () => {
-  await browser?.close();
-  browser = undefined;
-});
-afterAll(async () => {
-  microphones.remove();
-  await product.stop();
-});
+const stage = setStage("fresh");
+afterAll(microphones.remove);
 
 const say = (text: string) => process.stderr.write(`${text}\n`);
 const median = (values: number[]) => [...values].sort((a, b) => a - b)[values.length >> 1] ?? NaN;
@@ -40,8 +27,7 @@ async function warm(page: Page): Promise<void> {
 }
 
 test("the main thread has no long task in 8 s of listening", async () => {
-  browser = await launchBrowser({ wav: microphones.voice(55).wav });
-  const { page } = await openProfile(browser, product.address, "phone");
+  const { page } = await stage.open({ wav: microphones.voice(55).wav });
   await warm(page);
   const longTasks = await watchLongTasks(page);
   const all: number[][] = [];
@@ -59,8 +45,7 @@ test("the main thread has no long task in 8 s of listening", async () => {
 }, 120_000);
 
 test("a note is on the screen within 80 ms of its arrival from the device", async () => {
-  browser = await launchBrowser("none");
-  const { page } = await openProfile(browser, product.address, "phone");
+  const { page } = await stage.open("none");
   await singSynthetically(page);
   await warm(page);
   const medians: number[] = [];
@@ -94,8 +79,7 @@ test("a note is on the screen within 80 ms of its arrival from the device", asyn
 }, 120_000);
 
 test("the result of a 20 s phrase stands within 300 ms of its end", async () => {
-  browser = await launchBrowser({ wav: microphones.longVoice(52).wav });
-  const { page } = await openProfile(browser, product.address, "phone");
+  const { page } = await stage.open({ wav: microphones.longVoice(52).wav });
   await page.addInitScript(() => {
     const marks = { stopMs: 0, shownMs: 0 };
     Object.assign(window, { marks });

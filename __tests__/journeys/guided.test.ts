@@ -1,32 +1,13 @@
-import { readFileSync } from "node:fs";
-import type { Browser, Page } from "playwright-core";
-import { launchBrowser, openProfile, type Viewport } from "./browser";
+import type { Page } from "playwright-core";
+import { axeFaults } from "./axeFaults";
+import type { Viewport } from "./browser";
 import { followTones, hum, type FollowingSinger } from "./followingSinger";
-import { startProduct, type Product } from "./product";
+import { setStage } from "./stage";
 
-const axe = readFileSync(require.resolve("axe-core/axe.min.js"), "utf8");
-let product: Product;
-let browser: Browser;
-
-beforeAll(async () => {
-  product = await startProduct();
-  browser = await launchBrowser("none");
-}, 60_000);
-afterAll(async () => {
-  await browser.close();
-  await product.stop();
-});
-
-/** What axe finds on the page as it stands. */
-async function faults(page: Page): Promise<unknown> {
-  await page.evaluate(axe);
-  return page.evaluate(
-    "axe.run({ resultTypes: ['violations'] }).then((r) => r.violations.map(({ id, nodes }) => id + ': ' + nodes.map(({ target }) => target.join(' ')).join(', ')))",
-  );
-}
+const stage = setStage("kept");
 
 async function open(voice: FollowingSinger, viewport: Viewport = "phone") {
-  const profile = await openProfile(browser, product.address, viewport);
+  const profile = await stage.open("none", viewport);
   await followTones(profile.page, voice);
   return profile;
 }
@@ -94,24 +75,23 @@ test("under 16 nothing is tried twice, and stopping early keeps what was held", 
     .getByText(/^Now sing/)
     .first()
     .waitFor();
-  expect(await faults(page)).toEqual([]);
+  expect(await axeFaults(page)).toEqual([]);
   await page.getByTestId("guided-turn").waitFor({ timeout: 90_000 });
-  expect(await faults(page)).toEqual([]);
+  expect(await axeFaults(page)).toEqual([]);
   expect(await page.getByTestId("guided-turn").textContent()).toContain("B♭3");
   await page.getByTestId("guided-finish").click();
   await page.getByTestId("guided-week").waitFor();
-  expect(await faults(page)).toEqual([]);
+  expect(await axeFaults(page)).toEqual([]);
   expect(await page.getByTestId("guided-result").textContent()).toContain("Only the low end was looked for.");
   await context.close();
 }, 120_000);
 
 test("a refused microphone is said so before anything sounds", async () => {
-  const refusing = await launchBrowser("refused");
-  const { page } = await openProfile(refusing, product.address, "phone");
+  const { context, page } = await stage.open("refused");
   await page.goto("/voice/guided");
   await page.getByTestId("guided-start").click();
   await page.getByTestId("guided-failed-refused").waitFor();
   await page.getByTestId("guided-restart").click();
   await page.getByTestId("guided-start").waitFor();
-  await refusing.close();
+  await context.close();
 }, 60_000);

@@ -1,29 +1,16 @@
-import { readFileSync } from "node:fs";
-import type { Browser, Page } from "playwright-core";
-import { launchBrowser, openProfile, type Viewport } from "./browser";
-import { startProduct, type Product } from "./product";
+import type { Page } from "playwright-core";
+import type { Viewport } from "./browser";
+import { axeFaults } from "./axeFaults";
+import { signInAsMaren } from "./signIn";
+import { setStage } from "./stage";
 
-const axe = readFileSync(require.resolve("axe-core/axe.min.js"), "utf8");
-let product: Product;
-let browser: Browser;
-
-beforeAll(async () => {
-  product = await startProduct();
-  browser = await launchBrowser("none");
-}, 60_000);
-afterAll(async () => {
-  await browser.close();
-  await product.stop();
-});
+const stage = setStage("kept");
 
 /** A profile signed in as one of the demonstration's singers, who has a voice, songs and decided keys. */
 async function asMaren(viewport: Viewport, colorScheme: "light" | "dark") {
-  const profile = await openProfile(browser, product.address, viewport, colorScheme);
+  const profile = await stage.open("none", viewport, colorScheme);
   const { page } = profile;
-  await page.goto("/account/sign-in?next=/songs");
-  await page.getByTestId("email").fill("maren@orlow-quay.example");
-  await page.getByTestId("password").fill("slipway lantern");
-  await page.getByTestId("send").click();
+  await signInAsMaren(page, "/songs");
   await page.getByText("Lantern on the Slipway").waitFor();
   const songs = (await page.evaluate(
     "fetch('/api/auth/refresh', { method: 'POST' }).then((r) => r.json()).then(({ accessToken }) => fetch('/api/songs', { headers: { authorization: `Bearer ${accessToken}` } })).then((r) => r.json())",
@@ -55,11 +42,6 @@ function screens(ferry: string): [path: string, ready: (page: Page) => Promise<u
   ];
 }
 
-interface Finding {
-  id: string;
-  nodes: { target: string[] }[];
-}
-
 /** The same product before anything was done in it. */
 const strangersScreens: [path: string, ready: (page: Page) => Promise<unknown>][] = [
   ["/voice", (page) => page.getByRole("link", { name: "Sing a few seconds" }).waitFor()],
@@ -71,11 +53,7 @@ const strangersScreens: [path: string, ready: (page: Page) => Promise<unknown>][
 
 /** What is wrong with one screen: axe's findings, and whether it scrolls sideways. */
 async function faults(page: Page): Promise<string[]> {
-  await page.evaluate(axe);
-  const violations = (await page.evaluate(
-    "axe.run({ resultTypes: ['violations'] }).then((r) => r.violations)",
-  )) as Finding[];
-  const said = violations.map(({ id, nodes }) => `${id}: ${nodes.map(({ target }) => target.join(" ")).join(", ")}`);
+  const said = await axeFaults(page);
   return (await scrollsSideways(page)) ? [...said, "scrolls sideways"] : said;
 }
 
@@ -90,7 +68,7 @@ describe.each([
   ["wide", "dark"],
 ] as const)("every screen on the %s in %s colours", (viewport, scheme) => {
   test("is accessible, throws nothing and does not scroll sideways", async () => {
-    const stranger = await openProfile(browser, product.address, viewport, scheme);
+    const stranger = await stage.open("none", viewport, scheme);
     const singer = await asMaren(viewport, scheme);
     const findings: Record<string, string[]> = {};
     const look = async (page: Page, who: string, list: typeof strangersScreens) => {
@@ -142,7 +120,7 @@ test("♯ and ♭ are drawn from the shipped music font, in text and in charts",
 }, 60_000);
 
 test("an address that nothing stands at answers 404 and says so", async () => {
-  const { context, page } = await openProfile(browser, product.address, "phone");
+  const { context, page } = await stage.open("none", "phone");
   expect((await page.goto("/nowhere"))?.status()).toBe(404);
   await page.getByText("Nothing stands at this address").waitFor();
   expect((await page.goto("/songs"))?.status()).toBe(200);

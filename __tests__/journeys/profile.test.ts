@@ -1,29 +1,16 @@
-import { readFileSync } from "node:fs";
-import type { Browser, Page } from "playwright-core";
-import { launchBrowser, openProfile, type Viewport } from "./browser";
-import { startProduct, type Product } from "./product";
+import type { Page } from "playwright-core";
+import { axeFaults } from "./axeFaults";
+import type { Viewport } from "./browser";
+import { signInAsMaren } from "./signIn";
+import { setStage } from "./stage";
 
-const axe = readFileSync(require.resolve("axe-core/axe.min.js"), "utf8");
-let product: Product;
-let browser: Browser;
-
-beforeAll(async () => {
-  product = await startProduct();
-  browser = await launchBrowser("none");
-}, 60_000);
-afterAll(async () => {
-  await browser.close();
-  await product.stop();
-});
+const stage = setStage("kept");
 
 /** Maren of the demonstration: two phrases and a guided hold. */
 async function openVoice(viewport: Viewport, scheme: "light" | "dark" = "light") {
-  const profile = await openProfile(browser, product.address, viewport, scheme);
+  const profile = await stage.open("none", viewport, scheme);
   const { page } = profile;
-  await page.goto("/account/sign-in?next=/voice");
-  await page.getByTestId("email").fill("maren@orlow-quay.example");
-  await page.getByTestId("password").fill("slipway lantern");
-  await page.getByTestId("send").click();
+  await signInAsMaren(page, "/voice");
   await page.getByTestId("voice-range").waitFor();
   return profile;
 }
@@ -82,17 +69,10 @@ test.each([
     await page.getByTestId("trend-as-table").click();
     await page.getByTestId("take-felt").first().click();
     await page.getByTestId("take-erase").nth(1).click();
-    await page.evaluate(axe);
-    const findings = await page.evaluate(
-      "axe.run({ resultTypes: ['violations'] }).then((r) => r.violations.map(({ id, nodes }) => id + ': ' + nodes.map(({ target }) => target.join(' ')).join(', ')))",
-    );
-    expect(findings).toEqual([]);
+    expect(await axeFaults(page)).toEqual([]);
     await page.goto("/voice/guided");
     await page.getByTestId("guided-start").waitFor();
-    await page.evaluate(axe);
-    expect(
-      await page.evaluate("axe.run({ resultTypes: ['violations'] }).then((r) => r.violations.map(({ id }) => id))"),
-    ).toEqual([]);
+    expect(await axeFaults(page)).toEqual([]);
     expect(await page.evaluate("document.documentElement.scrollWidth > document.documentElement.clientWidth")).toBe(
       false,
     );

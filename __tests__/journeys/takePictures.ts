@@ -5,6 +5,7 @@ import type { Page } from "playwright-core";
 import { launchBrowser, viewports, type Viewport } from "./browser";
 import { makeMicrophones } from "./microphone";
 import { startProduct } from "./product";
+import { signInAsMaren } from "./signIn";
 import { sungUpTo } from "./singing";
 
 const folder = join(__dirname, "..", "..", "docs", "pictures");
@@ -50,10 +51,7 @@ async function sung(page: Page): Promise<void> {
 
 /** A song, its keys and its ways, as Maren of the demonstration sees them. */
 async function classSongs(page: Page, viewport: Viewport): Promise<void> {
-  await page.goto("/account/sign-in?next=/songs");
-  await page.getByTestId("email").fill("maren@orlow-quay.example");
-  await page.getByTestId("password").fill("slipway lantern");
-  await page.getByTestId("send").click();
+  await signInAsMaren(page, "/songs");
   await page.getByText("The Half-Past-Nine Ferry").click();
   await page.getByTestId("chart").waitFor();
   const song = page.url();

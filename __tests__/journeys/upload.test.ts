@@ -1,26 +1,16 @@
 import { execFileSync } from "node:child_process";
 import { readFileSync, truncateSync, writeFileSync } from "node:fs";
 import { join } from "node:path";
-import type { Browser, Page } from "playwright-core";
+import type { Page } from "playwright-core";
 import { glyphs, noteName } from "../../shared/music/pitch";
-import { launchBrowser, openProfile, type Viewport } from "./browser";
+import type { Viewport } from "./browser";
 import { makeMicrophones } from "./microphone";
-import { startProduct, type Product } from "./product";
+import { setStage } from "./stage";
 
 const microphones = makeMicrophones();
 const voice = microphones.voice(55);
-let product: Product;
-let browser: Browser;
-
-beforeAll(async () => {
-  product = await startProduct();
-  browser = await launchBrowser("none");
-}, 60_000);
-afterAll(async () => {
-  await browser.close();
-  microphones.remove();
-  await product.stop();
-});
+const stage = setStage("kept");
+afterAll(microphones.remove);
 
 const at = (name: string) => join(microphones.folder, name);
 
@@ -32,7 +22,7 @@ function encoded(kind: string, ...how: string[]): string {
 }
 
 async function open(viewport: Viewport = "phone") {
-  const profile = await openProfile(browser, product.address, viewport);
+  const profile = await stage.open("none", viewport);
   await profile.page.goto("/voice/sing");
   await profile.page.getByTestId("sing-upload").click();
   await profile.page.getByTestId("upload-choose").waitFor();

@@ -1,29 +1,16 @@
-import type { Browser, Page } from "playwright-core";
+import type { Page } from "playwright-core";
 import { glyphs, noteName } from "../../shared/music/pitch";
-import { launchBrowser, openProfile, type Microphone, type Viewport } from "./browser";
+import type { Microphone, Viewport } from "./browser";
 import { makeMicrophones } from "./microphone";
-import { startProduct, type Product } from "./product";
+import { setStage } from "./stage";
 import { singFor, sungUpTo } from "./singing";
 
 const microphones = makeMicrophones();
-let product: Product;
-let browser: Browser | undefined;
-
-beforeAll(async () => {
-  product = await startProduct();
-}, 60_000);
-afterEach(async () => {
-  await browser?.close();
-  browser = undefined;
-});
-afterAll(async () => {
-  microphones.remove();
-  await product.stop();
-});
+const stage = setStage("fresh");
+afterAll(microphones.remove);
 
 async function open(microphone: Microphone, viewport: Viewport = "phone") {
-  browser = await launchBrowser(microphone);
-  return openProfile(browser, product.address, viewport);
+  return stage.open(microphone, viewport);
 }
 
 /** From home to the result, as a stranger would. */

@@ -1,22 +1,14 @@
-import type { Browser, Page } from "playwright-core";
-import { launchBrowser, openProfile, type Viewport } from "./browser";
+import type { Page } from "playwright-core";
+import type { Viewport } from "./browser";
 import { makeMicrophones } from "./microphone";
-import { startProduct, type Product } from "./product";
+import { setStage } from "./stage";
+import { signInAsMaren } from "./signIn";
 import { singFor } from "./singing";
 
 const microphones = makeMicrophones();
-let product: Product;
-let browser: Browser;
-
-beforeAll(async () => {
-  product = await startProduct();
-  browser = await launchBrowser({ wav: microphones.voice(55).wav });
-}, 60_000);
-afterAll(async () => {
-  await browser.close();
-  microphones.remove();
-  await product.stop();
-});
+const voice = { wav: microphones.voice(55).wav };
+const stage = setStage("kept");
+afterAll(microphones.remove);
 
 const chart = [
   "Verse 1",
@@ -96,6 +88,11 @@ async function chooseKeyAndWay(page: Page, viewport: Viewport): Promise<{ key: s
   // what could not be read stands in the moved chart as it was typed
   expect(await page.getByTestId("moved-chart").textContent()).toMatch(/Chart in .*window, rain in .*X&7/);
   await page.getByTestId("use-way").click();
+  // the button says so when the way is kept
+  await page
+    .getByTestId("use-way")
+    .and(page.getByRole("button", { name: /^You use/ }))
+    .waitFor();
   await page.getByText(/^Your key since/).waitFor();
   const way = await chosenWay(page);
   await page.goto(songPage);
@@ -126,7 +123,7 @@ describe.each(["phone", "wide"] as const)("the whole journey on the %s", (viewpo
   const email = `singer.${viewport}@example.org`;
 
   test("sing, add a song, find a key and a way, sign up, and find it all on another device", async () => {
-    const first = await openProfile(browser, product.address, viewport);
+    const first = await stage.open(voice, viewport);
     const { page } = first;
     await singAndKeep(page);
     await addSong(page);
@@ -146,7 +143,7 @@ describe.each(["phone", "wide"] as const)("the whole journey on the %s", (viewpo
     expect(first.errors).toEqual([]);
     await first.context.close();
 
-    const second = await openProfile(browser, product.address, viewport);
+    const second = await stage.open(voice, viewport);
     await second.page.goto(`/account/sign-in?next=${encodeURIComponent(songAddress)}`);
     await second.page.getByTestId("email").fill(email);
     await second.page.getByTestId("password").fill("not the password");
@@ -161,7 +158,7 @@ describe.each(["phone", "wide"] as const)("the whole journey on the %s", (viewpo
       .first()
       .waitFor();
     await second.page.goto(`${songAddress}/ways`);
-    await second.page.getByText(/^Your key since/).waitFor();
+    await second.page.getByRole("button", { name: /^You use/ }).waitFor();
     expect(await chosenWay(second.page)).toBe(way);
     await second.page.goto("/voice");
     await second.page.getByTestId("take-row").waitFor();
@@ -169,12 +166,8 @@ describe.each(["phone", "wide"] as const)("the whole journey on the %s", (viewpo
     await second.context.close();
 
     // somebody else, by address
-    const other = await openProfile(browser, product.address, viewport);
-    await other.page.goto("/account/sign-in");
-    await other.page.getByTestId("email").fill("maren@orlow-quay.example");
-    await other.page.getByTestId("password").fill("slipway lantern");
-    await other.page.getByTestId("send").click();
-    await other.page.waitForURL((url) => !url.pathname.endsWith("/sign-in"));
+    const other = await stage.open(voice, viewport);
+    await signInAsMaren(other.page, "/songs");
     const asked = other.page.waitForResponse((response) => response.url().endsWith(`/api${songAddress}`));
     await other.page.goto(songAddress);
     expect((await asked).status()).toBe(404);

@@ -1,6 +1,7 @@
 import { useLayoutEffect, useRef, useState, type CSSProperties, type ReactNode, type RefObject } from "react";
 import { setSigns } from "@/features/ui/textSigns";
 import { colors, fonts } from "@/features/ui/theme";
+import { unseen } from "@/features/ui/unseen";
 import { keySignParts } from "@/shared/music/keyWords";
 import { glyphs } from "@/shared/music/pitch";
 import type { KeyRow, Room } from "./keyRows";
@@ -189,15 +190,6 @@ function RoomCell({ room, style, strong }: { room: Room; style: CSSProperties; s
   );
 }
 
-export const unseen: CSSProperties = {
-  position: "absolute",
-  width: 1,
-  height: 1,
-  margin: -1,
-  overflow: "hidden",
-  clipPath: "inset(50%)",
-  whiteSpace: "nowrap",
-};
 export const cell: CSSProperties = { padding: 0, boxSizing: "border-box", verticalAlign: "middle" };
 export const firstColumn: CSSProperties = { position: "sticky", left: 0, zIndex: 1 };
 export const secondColumn: CSSProperties = { position: "sticky", left: 28, zIndex: 1 };

@@ -4,6 +4,7 @@ import { Heading } from "@/features/ui/Heading";
 import { Text } from "@/features/ui/Text";
 import { setSigns } from "@/features/ui/textSigns";
 import { colors, fonts } from "@/features/ui/theme";
+import { unseen } from "@/features/ui/unseen";
 import { glyphs } from "@/shared/music/pitch";
 import type { Chart, ChartLine } from "@/shared/songs/chart";
 import type { ChartToken } from "@/shared/songs/chordLine";
@@ -128,15 +129,8 @@ const tones: Partial<Record<ChartToken["kind"], CSSProperties>> = {
     textUnderlineOffset: 3,
   },
 };
-const spokenOnly: CSSProperties = {
-  position: "absolute",
-  width: 1,
-  height: 1,
-  overflow: "hidden",
-  clipPath: "inset(50%)",
-  whiteSpace: "nowrap",
-  userSelect: "none",
-};
+/** Nor does it go with what is copied from the chart. */
+const spokenOnly: CSSProperties = { ...unseen, userSelect: "none" };
 
 function Sign({ chord: { column, text, kind } }: { chord: ChartToken }) {
   const place: CSSProperties = {

@@ -5,6 +5,7 @@ import type { KeyName } from "@/shared/music/keyName";
 import { glyphs } from "@/shared/music/pitch";
 import { Text, type TextTone } from "./Text";
 import { fonts } from "./theme";
+import { unseen } from "./unseen";
 import { webStyle } from "./webStyle";
 
 export interface KeySignProps {
@@ -55,13 +56,3 @@ export function KeySign({ of: key, size, tone = "ink", stacked = false }: KeySig
     </View>
   );
 }
-
-const unseen = {
-  position: "absolute",
-  width: 1,
-  height: 1,
-  margin: -1,
-  overflow: "hidden",
-  clipPath: "inset(50%)",
-  whiteSpace: "nowrap",
-} as const;

@@ -1,5 +1,6 @@
 import { View } from "react-native";
 import { Text, type TextProps } from "./Text";
+import { unseen } from "./unseen";
 import { webProps, webStyle } from "./webStyle";
 
 export interface LiveTextProps extends TextProps {
@@ -9,17 +10,6 @@ export interface LiveTextProps extends TextProps {
   hidden?: boolean;
 }
 
-/** Out of sight, not out of hearing. */
-const hiddenStyle = webStyle({
-  position: "absolute",
-  width: 1,
-  height: 1,
-  margin: -1,
-  overflow: "hidden",
-  clipPath: "inset(50%)",
-  whiteSpace: "nowrap",
-});
-
 /** Words that are spoken when they change: states of the recorder, results. */
 export function LiveText({ urgent = false, hidden = false, children, ...text }: LiveTextProps) {
   return (
@@ -27,7 +17,7 @@ export function LiveText({ urgent = false, hidden = false, children, ...text }: 
       role={urgent ? "alert" : "status"}
       aria-live={urgent ? "assertive" : "polite"}
       {...webProps({ "aria-atomic": true })}
-      style={hidden ? hiddenStyle : null}
+      style={hidden ? webStyle(unseen) : null}
     >
       <Text {...text}>{children}</Text>
     </View>

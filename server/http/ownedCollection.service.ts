@@ -41,6 +41,9 @@ export class OwnedCollection<Item extends { id: string }, Row extends Item & Own
   /** Creates or replaces; the same request may be sent again. True if the item is new. */
   async put(userId: string, item: Item): Promise<boolean> {
     return this.dataSource.transaction(async (manager) => {
+      // One writer per account at a time: ON CONFLICT guards only the primary key, not the other unique
+      // index (id, user_id), and the count of items must not be overtaken.
+      await manager.query("SELECT FROM users WHERE id = $1 FOR NO KEY UPDATE", [userId]);
       await this.options.beforeSave?.(manager, userId, item);
       const { columns, tableName } = this.dataSource.getMetadata(this.entity);
       const kept = new Set(["id", "user_id", "saved_at"]);

@@ -6,7 +6,7 @@ import { decisionFor, decisionQueries } from "@/features/keys/decisionQueries";
 import { ShelfStrip } from "@/features/keys/ShelfStrip";
 import { keyInHand, keyRowsOf } from "@/features/keys/songKeys";
 import { SignedOutNotice } from "@/features/songs/SignedOut";
-import { SongShelf, type ShelfKey } from "@/features/songs/SongShelf";
+import { SongShelf, type ShelfKey } from "@/features/songs/shelf/SongShelf";
 import { songMoveWords } from "@/features/songs/songFacts";
 import { songQueries } from "@/features/songs/songQueries";
 import { LinkButton } from "@/features/ui/LinkButton";

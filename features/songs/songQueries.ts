@@ -3,7 +3,7 @@ import { ApiError } from "@/features/api/apiError";
 import { queryClient } from "@/features/api/queryClient";
 import { shelf } from "@/features/api/shelf";
 import type { Song } from "@/shared/contract/song";
-import { seedDemoSongs } from "./demoShelf";
+import { seedDemoSongs } from "./shelf/demoShelf";
 
 export const songQueries = {
   all: () =>

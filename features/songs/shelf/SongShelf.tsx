@@ -12,7 +12,7 @@ import { colors, fonts } from "@/features/ui/theme";
 import { webStyle } from "@/features/ui/webStyle";
 import type { Song } from "@/shared/contract/song";
 import type { KeyName } from "@/shared/music/keyName";
-import { songFacts, songsNamed } from "./songFacts";
+import { songFacts, songsNamed } from "../songFacts";
 
 /** What the shelf shows of the key that was decided for a song. */
 export interface ShelfKey {

@@ -1,5 +1,5 @@
 import { useRouter } from "expo-router";
-import { EditScreen } from "@/features/songs/EditScreen";
+import { EditScreen } from "@/features/songs/editor/EditScreen";
 
 export default function NewSongRoute() {
   const router = useRouter();

@@ -1,6 +1,6 @@
 import { useQuery } from "@tanstack/react-query";
 import { useLocalSearchParams, useRouter } from "expo-router";
-import { EditScreen } from "@/features/songs/EditScreen";
+import { EditScreen } from "@/features/songs/editor/EditScreen";
 import { SongState } from "@/features/songs/SongState";
 import { songQueries } from "@/features/songs/songQueries";
 

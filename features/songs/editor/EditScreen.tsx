@@ -8,7 +8,7 @@ import type { Song } from "@/shared/contract/song";
 import { draftStore } from "./draftStore";
 import { draftOf, emptyDraft } from "./songDraft";
 import { SongForm } from "./SongForm";
-import { useSaveSong } from "./songQueries";
+import { useSaveSong } from "../songQueries";
 
 export interface EditScreenProps {
   /** the song being changed; null for a new one */

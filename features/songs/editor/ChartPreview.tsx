@@ -4,8 +4,8 @@ import { Heading } from "@/features/ui/Heading";
 import { Text } from "@/features/ui/Text";
 import { colors } from "@/features/ui/theme";
 import type { Chart } from "@/shared/songs/chart";
-import { ChartView } from "./ChartView";
-import { firstLines } from "./shownLines";
+import { ChartView } from "../ChartView";
+import { firstLines } from "../shownLines";
 
 /** So much is drawn while one types; the page of the song shows all. */
 const most = 200;

@@ -1,7 +1,7 @@
 import { TextDecoder, TextEncoder } from "node:util";
 import { fireEvent, render, screen, waitFor, within } from "@testing-library/react";
 import type { Song } from "@/shared/contract/song";
-import * as cells from "./chartCells";
+import * as cells from "../chartCells";
 import { draftStore } from "./draftStore";
 import { emptyDraft, type SongDraft } from "./songDraft";
 import { SongForm } from "./SongForm";
@@ -10,7 +10,7 @@ import { SongForm } from "./SongForm";
 Object.assign(globalThis, { TextDecoder, TextEncoder });
 
 // Jest runs no import() at run time; the readers themselves are the real ones.
-jest.mock("./lazyReaders", () => ({
+jest.mock("../lazyReaders", () => ({
   lazyReaders: {
     melodyFile: async () => jest.requireActual<object>("@/shared/songs/melodyFile"),
     demoSongs: async () => jest.requireActual<object>("@/shared/songs/demoSongs"),

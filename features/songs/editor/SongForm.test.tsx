@@ -10,7 +10,7 @@ import { SongForm } from "./SongForm";
 Object.assign(globalThis, { TextDecoder, TextEncoder });
 
 // Jest runs no import() at run time; the readers themselves are the real ones.
-jest.mock("../lazyReaders", () => ({
+jest.mock("../files/lazyReaders", () => ({
   lazyReaders: {
     melodyFile: async () => jest.requireActual<object>("@/shared/songs/melodyFile"),
     demoSongs: async () => jest.requireActual<object>("@/shared/songs/demoSongs"),

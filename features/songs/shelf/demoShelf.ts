@@ -2,7 +2,7 @@ import { newId } from "@/features/api/newId";
 import { session } from "@/features/api/session";
 import { shelf } from "@/features/api/shelf";
 import type { Song } from "@/shared/contract/song";
-import { lazyReaders } from "../lazyReaders";
+import { lazyReaders } from "../files/lazyReaders";
 
 const mark = "larkspan.demo-songs";
 

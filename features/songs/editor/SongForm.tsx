@@ -12,7 +12,7 @@ import { ChartPreview } from "./ChartPreview";
 import { draftStore } from "./draftStore";
 import { KeyChooser } from "./KeyChooser";
 import { draftErrors, songFromDraft, type DraftErrors, type SongDraft, type SongOrigin } from "./songDraft";
-import { TuneFields } from "../TuneFields";
+import { TuneFields } from "../melody/TuneFields";
 import { UnreadSigns } from "./UnreadSigns";
 
 export interface SongFormProps {

@@ -6,9 +6,9 @@ import { Select } from "@/features/ui/Select";
 import { Text } from "@/features/ui/Text";
 import { tonicPitchClass, type KeyName } from "@/shared/music/keyName";
 import { glyphs } from "@/shared/music/pitch";
-import { tonics } from "./editor/keyChoice";
-import { MelodyFileField } from "./files/MelodyFileField";
-import type { DraftErrors, SongDraft } from "./editor/songDraft";
+import { tonics } from "../editor/keyChoice";
+import { MelodyFileField } from "../files/MelodyFileField";
+import type { DraftErrors, SongDraft } from "../editor/songDraft";
 
 export interface TuneFieldsProps {
   draft: SongDraft;

@@ -47,7 +47,11 @@ export const aSong = (change: Partial<Song> = {}): Song => {
     beatsPerBar: 4,
     tempo: 92,
     demo: null,
+    tags: [],
+    archivedAt: null,
+    playedAt: null,
     createdAt: when,
+    revision: 1,
     ...change,
   };
 };

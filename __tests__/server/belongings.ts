@@ -42,7 +42,11 @@ export function aSong(changes: Partial<Song> = {}): Song {
     beatsPerBar: 3,
     tempo: 92,
     demo: null,
+    tags: [],
+    archivedAt: null,
+    playedAt: null,
     createdAt: instant,
+    revision: 1,
     ...changes,
   };
 }

@@ -8,6 +8,7 @@ beforeEach(async () => {
 });
 afterEach(() => database.drop());
 
+const names = ["FirstTables1764547200000", "KindOfTake1767225600000", "SongRevisions1769904000000"];
 const applied = () => database.query("SELECT name FROM migrations ORDER BY id");
 const tables = async () => {
   const rows = await database.query("SELECT table_name FROM information_schema.tables WHERE table_schema = 'public'");
@@ -16,7 +17,7 @@ const tables = async () => {
 
 it("runs every migration once, also when four servers start at the same moment", async () => {
   await Promise.all([1, 2, 3, 4].map(() => migrate(database.url)));
-  expect(await applied()).toEqual([{ name: "FirstTables1764547200000" }, { name: "KindOfTake1767225600000" }]);
+  expect((await applied()).map(({ name }) => name)).toEqual(names);
   expect(await tables()).toContain("songs");
 });
 
@@ -27,30 +28,51 @@ it("leaves data alone when it runs again", async () => {
   expect(await database.query("SELECT email FROM users")).toEqual([{ email: "a@orlow-quay.example" }]);
 });
 
-it("makes phrases of the takes that were kept before guided holds existed", async () => {
+/** Takes migrations back until the named one is the newest, does something with the database of that time, and comes forward. */
+async function asItWasAfter(name: string, work: () => Promise<unknown>): Promise<void> {
   await migrate(database.url);
   const source = await createMigrationSource(database.url).initialize();
   try {
-    await source.undoLastMigration();
-    await database.query(`
-      WITH person AS (INSERT INTO users (email, password_hash) VALUES ('a@orlow-quay.example', 'none') RETURNING id),
-      voice AS (INSERT INTO voices (id, user_id, name, created_at) SELECT gen_random_uuid(), id, 'My voice', now() FROM person RETURNING id, user_id)
-      INSERT INTO takes (id, user_id, voice_id, sung_at, duration_s, range, comfort, estimate, tuning_cents, certainty, reasons, notes)
-      SELECT gen_random_uuid(), user_id, id, now(), 9, '{}', '{}', '{}', 0, 0.8, '[]', '[]' FROM voice`);
+    while ((await applied()).at(-1)?.name !== name) await source.undoLastMigration();
+    await work();
     await source.runMigrations();
   } finally {
     await source.destroy();
   }
+}
+
+it("makes phrases of the takes that were kept before guided holds existed", async () => {
+  await asItWasAfter("FirstTables1764547200000", () =>
+    database.query(`
+      WITH person AS (INSERT INTO users (email, password_hash) VALUES ('a@orlow-quay.example', 'none') RETURNING id),
+      voice AS (INSERT INTO voices (id, user_id, name, created_at) SELECT gen_random_uuid(), id, 'My voice', now() FROM person RETURNING id, user_id)
+      INSERT INTO takes (id, user_id, voice_id, sung_at, duration_s, range, comfort, estimate, tuning_cents, certainty, reasons, notes)
+      SELECT gen_random_uuid(), user_id, id, now(), 9, '{}', '{}', '{}', 0, 0.8, '[]', '[]' FROM voice`),
+  );
   expect(await database.query("SELECT kind, shows FROM takes")).toEqual([{ kind: "phrase", shows: "both" }]);
+});
+
+it("gives songs that were kept before they had revisions their first, and no tags", async () => {
+  await asItWasAfter("KindOfTake1767225600000", () =>
+    database.query(`
+      WITH person AS (INSERT INTO users (email, password_hash) VALUES ('a@orlow-quay.example', 'none') RETURNING id)
+      INSERT INTO songs (id, user_id, title, chart, created_at)
+      SELECT gen_random_uuid(), id, 'Slack Water', 'Low tide', now() FROM person`),
+  );
+  expect(await database.query("SELECT title, tags, archived_at, played_at, revision FROM songs")).toEqual([
+    { title: "Slack Water", tags: [], archived_at: null, played_at: null, revision: 1 },
+  ]);
 });
 
 it("can be taken back, one after the other", async () => {
   await migrate(database.url);
   const source = await createMigrationSource(database.url).initialize();
   try {
-    await source.undoLastMigration();
-    expect(await tables()).toContain("takes");
-    await source.undoLastMigration();
+    for (const [k] of names.entries()) {
+      expect(await tables()).toContain("takes");
+      await source.undoLastMigration();
+      expect(await applied()).toHaveLength(names.length - k - 1);
+    }
   } finally {
     await source.destroy();
   }
@@ -64,7 +86,7 @@ it("makes the very columns that the entities describe", async () => {
     for (const { tableName, columns } of source.entityMetadatas) {
       const described = columns.map((column) => [
         column.databaseName,
-        source.driver.normalizeType(column),
+        column.isArray ? "ARRAY" : source.driver.normalizeType(column),
         column.isNullable,
       ]);
       const rows = await database.query(

@@ -16,7 +16,11 @@ const song: Song = {
   beatsPerBar: null,
   tempo: null,
   demo: null,
+  tags: [],
+  archivedAt: null,
+  playedAt: null,
   createdAt: "2026-03-05T19:00:00.000Z",
+  revision: 1,
 };
 const singing = { range: { lowMidi: 51, highMidi: 74 }, comfort: { lowMidi: 55, highMidi: 70 } };
 const rows = keyRowsOf(song, singing) ?? [];

@@ -10,7 +10,11 @@ const song = (title: string, chart: string, change: Partial<Song> = {}): Song =>
   beatsPerBar: 3,
   tempo: 92,
   demo: null,
+  tags: [],
+  archivedAt: null,
+  playedAt: null,
   createdAt: "2026-03-05T19:00:00.000Z",
+  revision: 1,
   ...change,
 });
 const shelf = [song("Slack Water", "Low tide"), song("Étoile", "the water is wide"), song("Gulls", "over the bar")];

@@ -140,7 +140,11 @@ function toSong(demo: (typeof demoSongs)[number], createdAt: string): Song {
     beatsPerBar: demo.beatsPerBar,
     tempo: demo.tempo,
     demo: demo.id,
+    tags: [],
+    archivedAt: null,
+    playedAt: null,
     createdAt,
+    revision: 1,
   };
 }
 

@@ -19,6 +19,11 @@ export const isoInstant: ValueTransformer = {
   from: (value: Date) => value.toISOString(),
 };
 
+export const isoInstantOrNull: ValueTransformer = {
+  to: (value: string | null) => value,
+  from: (value: Date | null) => value?.toISOString() ?? null,
+};
+
 /** For fields that may be missing from the contract: NULL in the table. */
 export const absentAsNull: ValueTransformer = {
   to: (value: unknown) => value ?? null,

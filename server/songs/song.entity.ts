@@ -1,6 +1,6 @@
 import { Column, Entity } from "typeorm";
 import type { Song } from "../../shared/contract/song";
-import { isoInstant, OwnedEntity } from "../database/owned.entity";
+import { isoInstant, isoInstantOrNull, OwnedEntity } from "../database/owned.entity";
 
 @Entity("songs")
 export class SongEntity extends OwnedEntity implements Song {
@@ -25,6 +25,18 @@ export class SongEntity extends OwnedEntity implements Song {
   @Column({ type: "text", nullable: true })
   demo!: string | null;
 
+  @Column({ type: "text", array: true })
+  tags!: string[];
+
+  @Column({ type: "timestamptz", name: "archived_at", nullable: true, transformer: isoInstantOrNull })
+  archivedAt!: string | null;
+
+  @Column({ type: "timestamptz", name: "played_at", nullable: true, transformer: isoInstantOrNull })
+  playedAt!: string | null;
+
   @Column({ type: "timestamptz", name: "created_at", transformer: isoInstant })
   createdAt!: string;
+
+  @Column({ type: "integer" })
+  revision!: number;
 }

@@ -7,7 +7,12 @@ const melodyNote = z.strictObject({
   start: z.number().min(0),
   duration: z.number().positive(),
   midi: z.number().min(0).max(127),
+  /** the syllable sung on it */
+  lyric: z.string().max(100).exactOptional(),
 });
+
+const tag = z.string().trim().min(1, "A tag needs a name.").max(40, "A tag may have at most 40 characters.");
+const allDiffer = (tags: string[]) => new Set(tags.map((name) => name.toLowerCase())).size === tags.length;
 
 /** The tune of a song: all its notes, or only its span. */
 const tune = z.discriminatedUnion("kind", [
@@ -34,6 +39,19 @@ export const song = z.strictObject({
   tempo: z.number().min(20).max(400).nullable(),
   /** which song of the demonstration this is a copy of; null for a song of one's own */
   demo: z.string().max(40).nullable(),
+  tags: z
+    .array(tag)
+    .max(20, "A song may have at most 20 tags.")
+    .refine(allDiffer, { message: "The same tag stands here twice." }),
+  /** when it was put aside; null while it stands on the shelf */
+  archivedAt: z.iso.datetime().nullable(),
+  /** when it was last played, if ever */
+  playedAt: z.iso.datetime().nullable(),
   createdAt: z.iso.datetime(),
+  /**
+   * Counted up by the place that keeps the song at each change; 0 = never kept. A change that names another revision
+   * than the kept one is refused ("changed-elsewhere"), unless it changes nothing.
+   */
+  revision: z.int().min(0).max(2_147_483_646),
 });
 export type Song = z.infer<typeof song>;

@@ -5,6 +5,8 @@ export interface MelodyNote {
   start: number;
   duration: number;
   midi: number;
+  /** the syllable sung on it, where known */
+  lyric?: string;
 }
 
 /** A tune with its home note. */

@@ -6,7 +6,7 @@ import { Screen } from "@/features/ui/Screen";
 import { useLayout } from "@/features/ui/useLayout";
 import type { Song } from "@/shared/contract/song";
 import { draftStore } from "./draftStore";
-import { draftOf, emptyDraft } from "./songDraft";
+import { draftOf, emptyDraft, newOrigin } from "./songDraft";
 import { SongForm } from "./SongForm";
 import { useSaveSong } from "../songQueries";
 
@@ -42,11 +42,7 @@ export function EditScreen({ song, onSaved }: EditScreenProps) {
       key={form.version}
       draft={form.draft}
       songId={id}
-      origin={() =>
-        song
-          ? { id: song.id, demo: song.demo, createdAt: song.createdAt }
-          : { id: form.newId, demo: null, createdAt: new Date().toISOString() }
-      }
+      origin={() => song ?? newOrigin(form.newId, new Date().toISOString())}
       problem={save.error}
       onSave={keep}
       frame={(fields, submit) => (

@@ -3,7 +3,7 @@ import { fireEvent, render, screen, waitFor, within } from "@testing-library/rea
 import type { Song } from "@/shared/contract/song";
 import * as cells from "../chartCells";
 import { draftStore } from "./draftStore";
-import { emptyDraft, type SongDraft } from "./songDraft";
+import { emptyDraft, newOrigin, type SongDraft } from "./songDraft";
 import { SongForm } from "./SongForm";
 
 // The DOM of the tests lacks these two of the browser.
@@ -17,11 +17,7 @@ jest.mock("../files/lazyReaders", () => ({
   },
 }));
 
-const origin = () => ({
-  id: "7f0b6f0e-6a51-4a8e-9a53-0a3d8f6f3f01",
-  demo: null,
-  createdAt: "2026-03-05T19:00:00.000Z",
-});
+const origin = () => newOrigin("7f0b6f0e-6a51-4a8e-9a53-0a3d8f6f3f01", "2026-03-05T19:00:00.000Z");
 const chart = "G       C\nLow tide and still\nD       G\nthe gulls go by";
 
 function open(draft: Partial<SongDraft> = {}, problem: Error | null = null) {

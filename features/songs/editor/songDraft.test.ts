@@ -1,7 +1,7 @@
 import { song as songContract } from "@/shared/contract/song";
-import { draftErrors, draftOf, emptyDraft, moveToHome, songFromDraft, type SongDraft } from "./songDraft";
+import { draftErrors, draftOf, emptyDraft, moveToHome, newOrigin, songFromDraft, type SongDraft } from "./songDraft";
 
-const origin = { id: "7f0b6f0e-6a51-4a8e-9a53-0a3d8f6f3f01", demo: null, createdAt: "2026-03-05T19:00:00.000Z" };
+const origin = newOrigin("7f0b6f0e-6a51-4a8e-9a53-0a3d8f6f3f01", "2026-03-05T19:00:00.000Z");
 const typed: SongDraft = {
   ...emptyDraft,
   title: " Slack Water ",

@@ -29,7 +29,12 @@ export interface SongDraft {
 export type DraftErrors = Partial<Record<keyof SongDraft, string>>;
 
 /** The parts of a song that no form field holds. */
-export type SongOrigin = Pick<Song, "id" | "demo" | "createdAt">;
+export type SongOrigin = Pick<Song, "id" | "demo" | "tags" | "archivedAt" | "playedAt" | "createdAt" | "revision">;
+
+/** The beginning of a song that was never kept. */
+export function newOrigin(id: string, createdAt: string): SongOrigin {
+  return { id, demo: null, tags: [], archivedAt: null, playedAt: null, createdAt, revision: 0 };
+}
 
 export const emptyDraft: SongDraft = {
   title: "",

@@ -43,7 +43,11 @@ async function seed(): Promise<void> {
       beatsPerBar: demo.beatsPerBar,
       tempo: demo.tempo,
       demo: demo.id,
+      tags: [],
+      archivedAt: null,
+      playedAt: null,
       createdAt: new Date().toISOString(),
+      revision: 0,
     };
     await shelf.put("songs", song);
   }

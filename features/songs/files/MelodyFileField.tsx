@@ -9,7 +9,7 @@ import { colors } from "@/features/ui/theme";
 import { glyphs, noteName } from "@/shared/music/pitch";
 import type { MelodyVoice } from "@/shared/songs/melodyVoice";
 import { readMelody } from "./readMelody";
-import type { DraftMelody, SongDraft } from "./editor/songDraft";
+import type { DraftMelody, SongDraft } from "../editor/songDraft";
 
 export interface MelodyFileFieldProps {
   melody: DraftMelody | null;

@@ -1,5 +1,6 @@
 import { readQuality } from "./chordQuality";
-import { glyphs, plainAccidentals } from "./pitch";
+import { leadingNote, type NoteNaming, readNote, writeNote } from "./noteNaming";
+import { plainAccidentals } from "./pitch";
 import { type KeyName, letterSteps, scaleSteps, spellAbove, spellInKey, spellTonic, tonicPitchClass } from "./keyName";
 
 /** A chord as written in a chart. */
@@ -16,25 +17,25 @@ export interface Chord {
   text: string;
 }
 
-const chordPattern = /^([A-G])([#b]?)(.*?)(?:\/([A-G][#b]?))?$/;
-
 /**
  * Reads a chord symbol. A symbol counts only when every character of it is understood.
  *
  * @param text one symbol without blanks: "Am7", "F♯ø", "Gsus4/D", "C7(b9,#11)", "Bb°7"
+ * @param naming how the writer calls notes; root and bass of the chord are in English naming whatever it is
  * @returns the chord, or null if this is no chord symbol
  * @see common practice of lead-sheet symbols
  * @example parseChord("Amen") // => null
  */
-export function parseChord(text: string): Chord | null {
+export function parseChord(text: string, naming: NoteNaming = "english"): Chord | null {
   if (text.length > 32) return null;
-  const match = chordPattern.exec(plainAccidentals(text));
-  if (!match) return null;
-  const [, letter = "", accidental = "", quality = "", bass = null] = match;
-  const intervals = readQuality(quality);
-  if (!intervals) return null;
-  const written = text.slice(1 + accidental.length, text.length - (bass === null ? 0 : bass.length + 1));
-  return { root: letter + accidental, quality: written, intervals, bass, text };
+  const root = leadingNote(text, naming);
+  if (!root) return null;
+  const behind = text.slice(root.length);
+  const slash = behind.lastIndexOf("/");
+  const bass = slash < 0 ? null : readNote(behind.slice(slash + 1), naming);
+  const quality = bass === null ? behind : behind.slice(0, slash);
+  const intervals = readQuality(plainAccidentals(quality));
+  return intervals && { root: root.note, quality, intervals, bass, text };
 }
 
 /**
@@ -70,20 +71,30 @@ export function chordThird(chord: Chord): "major" | "minor" | null {
  * @param semitones how far to move, whole, negative for down
  * @param target the key to arrive in
  * @param from the key it came from, which tells what a chromatic root was meant as; default: the plainest name of that key
+ * @param naming how the chord was written and is to be written
  * @returns the symbol; accidentals as glyphs where the chord was written with glyphs, else ASCII
  * @throws RangeError if semitones is not whole
  * @see common practice: bII, bIII, bVI, bVII as flats of the letter, #iv as a sharp, roots that lead up as sharps
  */
-export function transposeChord(chord: Chord, semitones: number, target: KeyName, from?: KeyName): string {
+export function transposeChord(chord: Chord, semitones: number, target: KeyName, from?: KeyName, naming: NoteNaming = "english"): string {
   if (!Number.isInteger(semitones)) throw new RangeError("semitones must be whole");
   const staysInKey = !from || (from.tonic === target.tonic && from.mode === target.mode);
   if (semitones % 12 === 0 && staysInKey) return chord.text;
   const move = (pc: number) => (((pc + semitones) % 12) + 12) % 12;
   const source = from?.tonic ?? spellTonic((((tonicPitchClass(target.tonic) - semitones) % 12) + 12) % 12, target.mode);
   const root = spellRoot(chord, move(tonicPitchClass(chord.root)), source, target);
-  const bass = chord.bass === null ? "" : `/${spellBass(chord, root, move(tonicPitchClass(chord.bass)), target)}`;
-  const asWritten = /[♯♭]/.test(chord.text) ? glyphs : (name: string) => name;
-  return asWritten(root) + chord.quality + asWritten(bass);
+  const bass = chord.bass === null ? null : spellBass(chord, root, move(tonicPitchClass(chord.bass)), target);
+  const withGlyphs = /[♯♭]/.test(chord.text);
+  const syllabic = /^[A-H](?:e?s|is)(?!us)/.test(chord.text);
+  const asWritten = (note: string) => {
+    const name = writeNote(note, naming, syllabic);
+    return withGlyphs ? name.replace(/[#b]+$/, glyphSigns) : name;
+  };
+  return asWritten(root) + chord.quality + (bass === null ? "" : `/${asWritten(bass)}`);
+}
+
+function glyphSigns(signs: string): string {
+  return signs.replaceAll("#", "♯").replaceAll("b", "♭");
 }
 
 /** Letters above the tonic of a chromatic root, by its semitones: written as a raised step, or as a lowered one. */

@@ -1,4 +1,5 @@
 import { type Chord, parseChord } from "../music/chord";
+import type { NoteNaming } from "../music/noteNaming";
 
 /** What one sign of a chord line is. Everything but "chord" and "unread" is left alone by transposition and is no mistake. */
 type ChartSign = "chord" | "no-chord" | "bar" | "repeat" | "beat" | "remark" | "unread";
@@ -29,11 +30,12 @@ const meantAsChord = (text: string) => chordish.test(text) || symbolish.test(tex
  * Reads a line as chords, deciding by all that it holds.
  *
  * @param line one line of a chart, without line break
+ * @param naming how the writer calls notes
  * @returns its signs in order, or null if the line as a whole is not a chord line (a lyric may hold "A" or "Am")
  */
-export function readChordLine(line: string): ChartToken[] | null {
+export function readChordLine(line: string, naming: NoteNaming = "english"): ChartToken[] | null {
   if (line.length > 2000) return null;
-  const tokens = splitSigns(line);
+  const tokens = splitSigns(line, naming);
   const counted = (kind: ChartSign) => tokens.filter((token) => token.kind === kind).length;
   const chords = tokens.filter((token) => token.kind === "chord");
   const words = tokens.filter((token) => token.kind === "unread" && !meantAsChord(token.text));
@@ -52,31 +54,31 @@ function readsAsWord(token: ChartToken): boolean {
   return /^[A-G]o$/.test(token.text) || /^A[.,!?]$/.test(token.text);
 }
 
-function splitSigns(line: string): ChartToken[] {
+function splitSigns(line: string, naming: NoteNaming): ChartToken[] {
   const tokens: ChartToken[] = [];
   const pieces = /\([^()|]*\)|[^\s|()]*\([^\s()|]*\)[^\s|()]*|\[\||\|\]|:?\|{1,2}:?|[^\s|]+/g;
-  for (const match of line.matchAll(pieces)) addPiece(tokens, match[0], match.index);
+  for (const match of line.matchAll(pieces)) addPiece(tokens, match[0], match.index, naming);
   return tokens;
 }
 
-function addPiece(tokens: ChartToken[], text: string, column: number): void {
+function addPiece(tokens: ChartToken[], text: string, column: number, naming: NoteNaming): void {
   const add = (kind: ChartSign, chord: Chord | null = null) => tokens.push({ column, text, chord, kind });
   if (noChord.test(text)) add("no-chord");
   else if (bar.test(text)) add("bar");
   else if (repeat.test(text)) add("repeat");
   else if (beat.test(text)) add("beat");
   else {
-    const chord = bareChord(text);
+    const chord = bareChord(text, naming);
     if (chord) add("chord", chord);
-    else if (!addSeveral(tokens, text, column)) add(/^\(.*\)$/.test(text) ? "remark" : "unread");
+    else if (!addSeveral(tokens, text, column, naming)) add(/^\(.*\)$/.test(text) ? "remark" : "unread");
   }
 }
 
 /** Chords run together or bracketed together: "(G D)", "G-D-Em", "Am,F". */
-function addSeveral(tokens: ChartToken[], text: string, column: number): boolean {
+function addSeveral(tokens: ChartToken[], text: string, column: number, naming: NoteNaming): boolean {
   const parts = [...text.matchAll(/[^-–,\s]+/g)].map((match) => ({ text: match[0], column: column + match.index }));
   if (parts.length < 2) return false;
-  const read = parts.map((part) => ({ ...part, chord: bareChord(part.text) }));
+  const read = parts.map((part) => ({ ...part, chord: bareChord(part.text, naming) }));
   if (!read.every((part) => part.chord || noChord.test(part.text) || beat.test(part.text))) return false;
   for (const part of read) {
     tokens.push({ ...part, kind: part.chord ? "chord" : noChord.test(part.text) ? "no-chord" : "beat" });
@@ -85,10 +87,10 @@ function addSeveral(tokens: ChartToken[], text: string, column: number): boolean
 }
 
 /** The chord inside optional brackets and behind-the-chord marks. */
-function bareChord(text: string): Chord | null {
+function bareChord(text: string, naming: NoteNaming): Chord | null {
   if (text.length > 40) return null;
-  const whole = parseChord(text);
+  const whole = parseChord(text, naming);
   if (whole) return whole;
   const core = /^[([{]*(.*?)[*,.?!~…:;'"↑↓]*[)\]}]*[*,.?!~…:;]*$/.exec(text)?.[1] ?? "";
-  return parseChord(core) ?? parseChord(`${core})`);
+  return parseChord(core, naming) ?? parseChord(`${core})`, naming);
 }

@@ -76,7 +76,13 @@ export function chordThird(chord: Chord): "major" | "minor" | null {
  * @throws RangeError if semitones is not whole
  * @see common practice: bII, bIII, bVI, bVII as flats of the letter, #iv as a sharp, roots that lead up as sharps
  */
-export function transposeChord(chord: Chord, semitones: number, target: KeyName, from?: KeyName, naming: NoteNaming = "english"): string {
+export function transposeChord(
+  chord: Chord,
+  semitones: number,
+  target: KeyName,
+  from?: KeyName,
+  naming: NoteNaming = "english",
+): string {
   if (!Number.isInteger(semitones)) throw new RangeError("semitones must be whole");
   const staysInKey = !from || (from.tonic === target.tonic && from.mode === target.mode);
   if (semitones % 12 === 0 && staysInKey) return chord.text;

@@ -1,8 +1,10 @@
 import { parseChord, transposeChord } from "../music/chord";
 import { type KeyName, tonicPitchClass } from "../music/keyName";
+import type { NoteNaming } from "../music/noteNaming";
 import { type ChartToken, readChordLine } from "./chordLine";
 import { reflow } from "./reflow";
-import { leadingLabel, sectionHeading } from "./sectionHeading";
+import { leadingLabel, readSectionName, sectionHeading, timesAlone } from "./sectionHeading";
+import type { SectionKind } from "./sectionKind";
 
 /**
  * One line of a chart; a sung line is two lines of text, chords over words.
@@ -16,11 +18,19 @@ export type ChartLine =
   | { kind: "blank"; text: string };
 
 /** A verse, a chorus …; label null for what stands before the first heading. */
-interface ChartSection {
+export interface ChartSection {
   label: string | null;
   /** the heading's line as written; null without heading, or where it stands on the first line of chords */
   heading: string | null;
   lines: ChartLine[];
+  /** null without label */
+  kind: SectionKind | null;
+  /** 2 for "Verse 2"; null without */
+  number: number | null;
+  /** how often it is played in a row */
+  times: number;
+  /** where only a heading stands: which section (from 0) it asks for again; null if it has lines or nothing earlier fits */
+  recalls: number | null;
 }
 
 /** A sign on a chord line that could not be read; it is kept as it is. Line and column count from 1, as editors show them. */
@@ -34,6 +44,10 @@ export interface UnreadSign {
 export interface Chart {
   sections: ChartSection[];
   unread: UnreadSign[];
+  /** how its writer calls notes; English where nothing is said */
+  naming?: NoteNaming;
+  /** its line breaks in order, where any of them is not "\n" */
+  breaks?: readonly string[];
 }
 
 const comment =
@@ -42,16 +56,19 @@ const tabulature = /^\s*[A-Ga-g][#b]?\s*[|:][-\d|:hpbrstx()/\\~^<>* ]{0,400}--/;
 
 /**
  * Reads a chart in the usual layout, chords over words. Any text is a chart: nothing is lost, and
- * printChart gives it back character by character (line breaks become "\n").
+ * printChart gives it back character by character.
  *
  * @param text the chart as typed or pasted
+ * @param options `naming`: how its writer calls notes
  * @returns its sections, and the signs on chord lines that could not be read
  */
-export function parseChart(text: string): Chart {
-  const rows = text.replace(/\r\n?/g, "\n").split("\n").map(readRow);
+export function parseChart(text: string, { naming = "english" }: { naming?: NoteNaming } = {}): Chart {
+  const breaks = text.match(/\r\n?|\n/g) ?? [];
+  const rows = text.split(/\r\n?|\n/).map((row) => readRow(row, naming));
   const sections: ChartSection[] = [];
   const open = (label: string | null, heading: string | null): ChartSection => {
-    const section = { label, heading, lines: [] };
+    const { kind, number, times } = label === null ? nameless : readSectionName(label);
+    const section = { label, heading, lines: [], kind, number, times, recalls: null };
     sections.push(section);
     return section;
   };
@@ -74,19 +91,27 @@ export function parseChart(text: string): Chart {
       index += 1;
     } else section.lines.push({ kind: "chords", written, chords });
   }
-  return { sections, unread: listUnread(sections) };
+  return {
+    sections: withRepeats(sections),
+    unread: listUnread(sections),
+    ...(naming === "english" ? {} : { naming }),
+    ...(breaks.every((sign) => sign === "\n") ? {} : { breaks }),
+  };
 }
 
 /**
  * Writes a chart as text, chords over words.
  *
  * @param chart any chart
- * @returns its text, lines joined by "\n"
+ * @returns its text; lines that were added to one with other line breaks than "\n" get its first kind
  */
-export function printChart(chart: Chart): string {
-  return chart.sections
-    .flatMap((section) => [...(section.heading === null ? [] : [section.heading]), ...section.lines.flatMap(printLine)])
-    .join("\n");
+export function printChart({ sections, breaks }: Chart): string {
+  const rows = sections.flatMap(({ heading, lines }) => [
+    ...(heading === null ? [] : [heading]),
+    ...lines.flatMap(printLine),
+  ]);
+  if (!breaks) return rows.join("\n");
+  return rows.map((row, index) => (index === 0 ? row : (breaks[index - 1] ?? breaks[0] ?? "\n") + row)).join("");
 }
 
 /**
@@ -122,12 +147,13 @@ export function chartTokens(chart: Chart): ChartToken[] {
  */
 export function transposeChart(chart: Chart, from: KeyName, to: KeyName): Chart {
   const semitones = (tonicPitchClass(to.tonic) - tonicPitchClass(from.tonic) + 12) % 12;
+  const { naming = "english" } = chart;
   const move = (token: ChartToken): ChartToken => {
     const bare = token.chord?.text;
-    const symbol = token.chord ? transposeChord(token.chord, semitones, to, from) : "";
+    const symbol = token.chord ? transposeChord(token.chord, semitones, to, from, naming) : "";
     return bare === undefined
       ? token
-      : { ...token, text: token.text.replace(bare, () => symbol), chord: parseChord(symbol) };
+      : { ...token, text: token.text.replace(bare, () => symbol), chord: parseChord(symbol, naming) };
   };
   const sections = chart.sections.map((section) => ({
     ...section,
@@ -139,7 +165,7 @@ export function transposeChart(chart: Chart, from: KeyName, to: KeyName): Chart 
         : { kind: "chords", written: laid.written, chords: laid.chords };
     }),
   }));
-  return { sections, unread: listUnread(sections) };
+  return { ...chart, sections, unread: listUnread(sections) };
 }
 
 type Row =
@@ -147,12 +173,34 @@ type Row =
   | { kind: "chords"; label: string | null; written: string; chords: ChartToken[] }
   | Extract<ChartLine, { kind: "lyrics" | "comment" | "blank" }>;
 
-function readRow(row: string): Row {
+const nameless = { kind: null, number: null, times: 1 };
+
+/** Lines that only say how often the part above is played, and headings that only call an earlier part back. */
+function withRepeats(sections: ChartSection[]): ChartSection[] {
+  const bare = ({ lines }: ChartSection) => lines.every(({ kind }) => kind === "blank" || kind === "comment");
+  const latest = new Map<string, number>();
+  return sections.map((section, index) => {
+    const last = section.lines.findLast(({ kind }) => kind !== "blank");
+    const counted = last?.kind === "comment" ? timesAlone(last.text) : null;
+    const times = counted !== null && section.times === 1 ? counted : section.times;
+    if (section.label === null) return { ...section, times };
+    const { name, kind, number } = readSectionName(section.label);
+    const anyOfKind = `any ${kind}`;
+    if (bare(section)) {
+      const same = latest.get(name) ?? (kind === "own" || number !== null ? undefined : latest.get(anyOfKind));
+      return { ...section, times, recalls: same ?? null };
+    }
+    latest.set(name, index).set(anyOfKind, index);
+    return { ...section, times };
+  });
+}
+
+function readRow(row: string, naming: NoteNaming): Row {
   if (row.trim() === "") return { kind: "blank", text: row };
-  if (comment.test(row) || tabulature.test(row)) return { kind: "comment", text: row };
+  if (timesAlone(row) !== null || comment.test(row) || tabulature.test(row)) return { kind: "comment", text: row };
   const heading = sectionHeading(row);
   const lead = leadingLabel(row);
-  const chords = readChordLine(row.slice(lead?.length ?? 0));
+  const chords = readChordLine(row.slice(lead?.length ?? 0), naming);
   // "[Am]" is a chord in brackets, "[Chorus]" a heading.
   if (heading !== null && !chords) return { kind: "heading", label: heading, text: row };
   if (!chords) return { kind: "lyrics", lyrics: row };

@@ -7,6 +7,7 @@ const report: TakeReport = {
   verdict: "heard",
   sentence: "You sang from F3 to C5.",
   nextStep: "Try it in a song.",
+  advice: "go-on",
   durationS: 9.4,
   f0: [null, 220],
   notes: [

@@ -6,7 +6,7 @@ import { findNotes, HELD_IN_HOLD_S, HELD_IN_PHRASE_S, type HeardNote } from "./s
 import { weedNotes } from "./noteWeeding";
 import { weighCertainty } from "./takeCertainty";
 import { judgeTake, refusal } from "./takeVerdict";
-import type { PitchBand, SungNote, TakeReport } from "./takeReport";
+import type { Advice, PitchBand, SungNote, TakeReport } from "./takeReport";
 import { comfortBand, probableReach } from "./vocalReach";
 
 /**
@@ -34,17 +34,19 @@ export function listenToTake(pcm: Float32Array, sampleRate: number, options: { h
   const spread = pitchSpread(clear);
   if (verdict !== "heard" || spread === null) {
     const why = refusal(verdict === "heard" ? "not-singing" : verdict);
-    return { verdict: verdict === "heard" ? "not-singing" : verdict, ...why, ...base, range: null, comfort: null, estimate: null, tessitura: null, certainty: 0, reasons: [why.sentence] };
+    return { verdict: verdict === "heard" ? "not-singing" : verdict, ...why, advice: "sing-again", ...base, range: null, comfort: null, estimate: null, tessitura: null, certainty: 0, reasons: [why.sentence] };
   }
   const range = { lowMidi: Math.min(...clear.map((n) => n.midi)), highMidi: Math.max(...clear.map((n) => n.midi)) };
   const comfort = comfortBand(range, spread);
   const estimate = probableReach(range);
   const { certainty, reasons } = weighCertainty(notes, frames, room);
   const tuned = base.tuningCents / 100;
+  const advice = adviceFor(certainty, range);
   return {
     verdict,
     sentence: `You sang from ${named(range.lowMidi - tuned)} to ${named(range.highMidi - tuned)}.`,
-    nextStep: nextStepFor(certainty, range),
+    nextStep: NEXT_STEPS[advice],
+    advice,
     ...base,
     range,
     comfort,
@@ -59,10 +61,20 @@ function named(midi: number): string {
   return glyphs(noteName(midi));
 }
 
-function nextStepFor(certainty: number, range: PitchBand): string {
-  if (certainty < 0.5) return "Sing another line to make this surer.";
-  if (range.highMidi - range.lowMidi < 12) return "A song shows only part of a voice; hold your lowest and highest easy note to find the rest.";
-  return "Try it in a song.";
+/** Less sure than this, one more line is worth singing. */
+const SURE_ENOUGH = 0.5;
+/** A narrower range than this, in semitones, is a song's rather than a voice's. */
+const WIDE_ENOUGH = 12;
+
+const NEXT_STEPS: Record<Advice, string> = {
+  "sing-again": "Sing another line to make this surer.",
+  "hold-ends": "A song shows only part of a voice; hold your lowest and highest easy note to find the rest.",
+  "go-on": "Try it in a song.",
+};
+
+function adviceFor(certainty: number, range: PitchBand): Advice {
+  if (certainty < SURE_ENOUGH) return "sing-again";
+  return range.highMidi - range.lowMidi < WIDE_ENOUGH ? "hold-ends" : "go-on";
 }
 
 function sungNote({ start, end, midi, steadinessCents, vibrato, levelDb, sustained, clear }: HeardNote): SungNote {

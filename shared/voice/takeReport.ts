@@ -1,6 +1,12 @@
 /** What the recording was judged to be; everything but "heard" says why no range is given. */
 export type Verdict = "heard" | "too-short" | "too-quiet" | "too-noisy" | "clipped" | "not-singing" | "several-voices";
 
+/**
+ * What would help most after a take: singing it again (nothing was heard, or too little to be sure), holding the lowest
+ * and the highest easy note (only a part of the voice was heard), or going on to a song.
+ */
+export type Advice = "sing-again" | "hold-ends" | "go-on";
+
 /** One sung note. Times in seconds from the start of the take. */
 export interface SungNote {
   start: number;
@@ -31,6 +37,8 @@ export interface TakeReport {
   sentence: string;
   /** what to do next, one sentence */
   nextStep: string;
+  /** the same as one word, for a button that does it */
+  advice: Advice;
   durationS: number;
   /** fundamental frequency in Hz every 10 ms, index k is time k/100 s; null where unvoiced */
   f0: (number | null)[];

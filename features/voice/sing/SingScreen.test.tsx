@@ -57,6 +57,7 @@ const report: TakeReport = {
   verdict: "heard",
   sentence: "You sang from F3 to C5.",
   nextStep: "Try it in a song.",
+  advice: "go-on",
   durationS: 9,
   f0: [],
   notes: [

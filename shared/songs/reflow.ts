@@ -62,7 +62,14 @@ function wordStart(words: string, after: number, upTo: number): number | null {
   return null;
 }
 
-function expandTabs(text: string): string {
+/**
+ * Counts tabs out.
+ *
+ * @param text one line
+ * @returns the line with blanks in the place of each tab, to the next multiple of eight
+ * @example expandTabs("G\tC") // => "G       C"
+ */
+export function expandTabs(text: string): string {
   if (!text.includes("\t")) return text;
   let out = "";
   for (const character of text)

@@ -137,10 +137,11 @@ test("what is said holds together: comfort in range, estimate around it, quantil
 });
 
 test("the advice is a song for a wide take, the ends for a narrow one, and another line where little was heard", () => {
-  const take = (steps: number[], durationS: number) => listenToTake(singPhrase({ notes: steps.map((step) => ({ midi: 52 + step, durationS })), seed: 9, sampleRate: rate }).pcm, rate);
+  const take = (steps: number[], durationS: number, noiseSnrDb = 40) =>
+    listenToTake(singPhrase({ notes: steps.map((step) => ({ midi: 52 + step, durationS })), seed: 9, sampleRate: rate, noiseSnrDb }).pcm, rate);
   const wide = take([0, 4, 7, 12, 14, 12, 7, 4, 0, 14, 0, 7], 0.6);
   const narrow = take([0, 2, 4, 5, 4, 2, 0, 5, 4, 0], 0.6);
-  const little = take([0, 9, 4], 0.4);
+  const little = take([0, 9, 4], 0.45, 8);
   expect([wide.advice, wide.nextStep]).toEqual(["go-on", "Try it in a song."]);
   expect([narrow.advice, narrow.nextStep]).toEqual(["hold-ends", expect.stringContaining("hold your lowest and highest")]);
   expect([little.advice, listenToTake(new Float32Array(rate), rate).advice]).toEqual(["sing-again", "sing-again"]);

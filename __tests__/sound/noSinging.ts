@@ -96,12 +96,12 @@ export function pluck(out: Float32Array, rate: number, at: number, midi: number,
 }
 
 /** Speech by the machine's own voice; null where espeak-ng is not installed. */
-export function speech(text: string, voice = "en", wordsPerMinute = 160): { pcm: Float32Array; sampleRate: number } | null {
+export function speech(text: string, voice = "en", wordsPerMinute = 160, pitch = 50): { pcm: Float32Array; sampleRate: number } | null {
   if (spawnSync("espeak-ng", ["--version"]).status !== 0) return null;
   const folder = mkdtempSync(join(tmpdir(), "speech-"));
   try {
     const path = join(folder, "speech.wav");
-    execFileSync("espeak-ng", ["-v", voice, "-s", String(wordsPerMinute), "-w", path, text]);
+    execFileSync("espeak-ng", ["-v", voice, "-s", String(wordsPerMinute), "-p", String(pitch), "-w", path, text]);
     return readWav(path);
   } finally {
     rmSync(folder, { recursive: true });

@@ -64,7 +64,7 @@ export function chordThird(chord: Chord): "major" | "minor" | null {
 
 /**
  * Moves a chord and spells it as the target key would: scale notes by the key, chromatic roots by the function they
- * were written with, a bass note by its place in the chord. The quality stays exactly as written, and a chord that
+ * were written with, a bass note by its place in the chord. The quality stays as written, and a chord that
  * stays in its key stays as it is.
  *
  * @param chord a parsed chord
@@ -96,7 +96,9 @@ export function transposeChord(
     const name = writeNote(note, naming, syllabic);
     return withGlyphs ? name.replace(/[#b]+$/, glyphSigns) : name;
   };
-  return asWritten(root) + chord.quality + (bass === null ? "" : `/${asWritten(bass)}`);
+  // Behind a root without a sign, an alteration would read as one: "Dbb9" becomes "C(b9)", not "Cb9".
+  const quality = /[#b♯♭s]$/.test(asWritten(root)) ? chord.quality : chord.quality.replace(/^[#b♯♭]\d+/, "($&)");
+  return asWritten(root) + quality + (bass === null ? "" : `/${asWritten(bass)}`);
 }
 
 function glyphSigns(signs: string): string {

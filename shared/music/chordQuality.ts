@@ -19,6 +19,7 @@ export function readQuality(written: string): number[] | null {
   const stack: Stack = { thirds: [4], fifths: [7], others: new Set(), seventh: null };
   // Brackets and commas only part one alteration from the next.
   let rest = written
+    .replaceAll("−", "-")
     .replace(/[(),]+/g, "|")
     .replace(/^\|/, "")
     .replace(/\|$/, "");
@@ -50,7 +51,7 @@ function readFamily(take: Take, stack: Stack): Family {
     stack.seventh = 11;
     return "majorSeventh";
   }
-  if (take(/^(?:[Mm]ajor|MAJ|[Mm]aj|MA|Ma|ma(?!dd)|M)/) !== null) return "major";
+  if (take(/^(?:[Mm]ajor|MAJ|[Mm]aj|MA|Ma|ma(?!dd)|M(?![Ii]))/) !== null) return "major";
   if (take(/^(?:[Mm]inor|MIN|[Mm]in|MI|Mi|mi|m|-(?!5))/) !== null) {
     stack.thirds = [3];
     take(/^\|(?=[MmΔ∆△])/);
@@ -60,7 +61,7 @@ function readFamily(take: Take, stack: Stack): Family {
     }
     return take(/^(?:[Mm]aj|Ma|ma(?!dd)|M)(?=\|?(?:7|9|11|13))/) === null ? "plain" : "major";
   }
-  if (take(/^(?:[Dd]im|[°ºo˚])/) !== null) {
+  if (take(/^(?:[Dd]im|[°º˚]|o(?!mit))/) !== null) {
     stack.thirds = [3];
     stack.fifths = [6];
     take(/^\|(?=[Mm]aj7)/);
@@ -72,7 +73,13 @@ function readFamily(take: Take, stack: Stack): Family {
     stack.seventh = 10;
     return "halfDiminished";
   }
-  if (take(/^(?:[Aa]ug|\+(?!5))/) !== null) stack.fifths = [8];
+  if (take(/^(?:[Aa]ug|\+(?!5))/) !== null) {
+    stack.fifths = [8];
+    if (take(/^[Δ∆△]/) !== null) {
+      stack.seventh = 11;
+      return "majorSeventh";
+    }
+  }
   return "plain";
 }
 
@@ -83,7 +90,7 @@ function readNumber(take: Take, stack: Stack, family: Family): void {
     family === "major" || family === "majorSeventh" || number === "7M" ? 11 : family === "diminished" ? 9 : 10;
   switch (number) {
     case "5":
-      stack.thirds = [];
+      if (family !== "diminished") stack.thirds = [];
       break;
     case "2":
       stack.others.add(2);
@@ -140,7 +147,7 @@ function readModifier(take: Take, stack: Stack): boolean {
       stack.fifths.includes(7) || stack.fifths.length === 0 ? [semitones] : [...new Set([...stack.fifths, semitones])];
     return true;
   }
-  const alteration = take(/^[#b+-](?:13|11|9)/);
+  const alteration = take(/^[#b+-](?:13|11|9|6)/);
   if (alteration !== null) {
     const degree = alteration.slice(1);
     stack.others.delete(naturalTop[degree]!);

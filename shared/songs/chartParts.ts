@@ -1,13 +1,12 @@
 import { parseChart } from "./chart";
-
-/** What a part of a song is. */
-export type PartKind = "verse" | "chorus" | "bridge" | "solo" | "intro" | "outro" | "tag" | "other";
+import { readSectionName } from "./sectionHeading";
+import type { SectionKind } from "./sectionKind";
 
 /** A part of a chart, between one heading and the next. */
 export interface ChartPart {
   /** its name without the times; null for what stands before the first heading */
   name: string | null;
-  kind: PartKind;
+  kind: SectionKind;
   /** how often it is played, 1 to 99 */
   times: number;
   /** rows it takes up, counted from 0, its heading first; `end` is the row behind it */
@@ -15,17 +14,8 @@ export interface ChartPart {
   end: number;
 }
 
-const kinds: readonly [RegExp, PartKind][] = [
-  [/^(?:pre|post)[- ]?chorus/i, "other"],
-  [/^(?:verse|strophe)/i, "verse"],
-  [/^(?:chorus|refrain|hook)/i, "chorus"],
-  [/^(?:bridge|middle (?:eight|8))/i, "bridge"],
-  [/^(?:solo|instrumental|interlude|break)/i, "solo"],
-  [/^(?:intro|lead[- ]?in)/i, "intro"],
-  [/^(?:outro|coda|ending|end)\b/i, "outro"],
-  [/^tag\b/i, "tag"],
-];
-const timesBehind = /\s*(?:[x×]\s?(\d{1,2})|\(\s*[x×]\s?(\d{1,2})\s*\)|\(?\s*(\d{1,2})\s?[x×]\s*\)?)\s*$/i;
+const timesBehind =
+  /[\s,-]*\(?\s*(?:[x×]\s?\d{1,2}|\d{1,2}\s?[x×]|\b(?:\d{1,2}|two|three|four)\s+times|\btwice)\s*\)?\s*$/i;
 
 /**
  * The parts of a chart.
@@ -35,21 +25,10 @@ const timesBehind = /\s*(?:[x×]\s?(\d{1,2})|\(\s*[x×]\s?(\d{1,2})\s*\)|\(?\s*(
  * @example chartParts("[Chorus] x2\nG\nLow tide")[0] // => { name: "Chorus", kind: "chorus", times: 2, start: 0, end: 3 }
  */
 export function chartParts(text: string): ChartPart[] {
-  return blocksOf(text).map(({ label, start, rows, gap }) => {
+  return blocksOf(text).map(({ label, kind, start, rows, gap }) => {
     const { name, times } = readLabel(label);
-    return { name, kind: partKind(name), times, start, end: start + rows.length + gap.length };
+    return { name, kind, times, start, end: start + rows.length + gap.length };
   });
-}
-
-/**
- * What kind of part a name speaks of.
- *
- * @param name a part's name, or null
- * @returns its kind; "other" for a name of one's own
- * @example partKind("Verse 2") // => "verse"
- */
-export function partKind(name: string | null): PartKind {
-  return kinds.find(([pattern]) => name !== null && pattern.test(name.trim()))?.[1] ?? "other";
 }
 
 /**
@@ -158,6 +137,7 @@ export function addPart(text: string, name: string): string | null {
 
 interface Block {
   label: string | null;
+  kind: SectionKind;
   /** the heading's row as written; null where it stands before chords on their row, or where there is none */
   heading: string | null;
   /** characters that a heading takes up before chords on their row */
@@ -171,7 +151,7 @@ interface Block {
 function blocksOf(text: string): Block[] {
   const all = text.replace(/\r\n?/g, "\n").split("\n");
   let row = 0;
-  const blocks = parseChart(text).sections.map(({ label, heading, lines }): Block => {
+  const blocks = parseChart(text).sections.map(({ label, kind, heading, lines }): Block => {
     const start = row;
     row += heading === null ? 0 : 1;
     for (const line of lines) row += line.kind === "sung" ? 2 : 1;
@@ -180,7 +160,7 @@ function blocksOf(text: string): Block[] {
     const lead = heading === null && label !== null && first && "chords" in first ? (first.chords[0]?.column ?? 0) : 0;
     let end = rows.length;
     while (end > 0 && rows[end - 1]!.trim() === "") end -= 1;
-    return { label, heading, lead, start, rows: rows.slice(0, end), gap: rows.slice(end) };
+    return { label, kind: kind ?? "own", heading, lead, start, rows: rows.slice(0, end), gap: rows.slice(end) };
   });
   return blocks.filter(({ label, rows }) => label !== null || rows.length > 0);
 }
@@ -194,10 +174,9 @@ function joined(before: string, blocks: readonly Block[]): string {
 
 function readLabel(label: string | null): { name: string | null; times: number } {
   if (label === null) return { name: null, times: 1 };
-  const match = timesBehind.exec(label);
-  const times = Number(match?.[1] ?? match?.[2] ?? match?.[3] ?? 1);
-  const name = match ? label.slice(0, match.index).trim() : label.trim();
-  return name === "" || times < 1 ? { name: label.trim(), times: 1 } : { name, times };
+  const { times } = readSectionName(label);
+  const name = times === 1 ? label.trim() : label.replace(timesBehind, "").trim();
+  return name === "" ? { name: label.trim(), times: 1 } : { name, times };
 }
 
 /** A row that is read as this heading: in the brackets of the old one, bare, with a colon, or in square brackets. */

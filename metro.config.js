@@ -17,6 +17,7 @@ config.resolver.resolveRequest = (context, name, platform) =>
 const workers = {
   "/worklets/takeWorker.js": "features/voice/recorder/takeWorker.ts",
   "/worklets/guidedWorker.js": "features/voice/guided/guidedWorker.ts",
+  "/worklets/songFileWorker.js": "features/songs/files/songFileWorker.ts",
 };
 const bundleWorker = (address) =>
   esbuild.buildSync({

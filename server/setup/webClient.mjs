@@ -9,7 +9,9 @@ import { locked } from "./postgres.mjs";
 const sources = ["app", "features", "shared", "assets", "fonts", "public"];
 const configs = ["package-lock.json", "app.json", "metro.config.js", "babel.config.js", "tsconfig.json"];
 /** Made by metro.config.js from the sources. */
-const made = ["takeWorker.js", "guidedWorker.js"].map((file) => path.join("public", "worklets", file));
+const made = ["takeWorker.js", "guidedWorker.js", "songFileWorker.js"].map((file) =>
+  path.join("public", "worklets", file),
+);
 const packed = /\.(js|css|html|svg|json|map|txt|webmanifest)$/;
 
 /** Exports the client unless dist/ was built from the very same sources; returns the folder. */

@@ -153,7 +153,12 @@ describe("ABC (standard 2.1)", () => {
     const file = read("x.abc", "X:1\nT:Low Tide\nL:1/4\nM:3/4\nK:A dor\nABc|d3|\nw:down by the sea\n");
     expect(file.title).toBe("Low Tide");
     expect(sung(file).melody).toMatchObject({ home: "A", mode: "dorian" });
-    expect(sung(file).lyrics).toEqual(["down", "by", "the", "sea"].map((text, start) => ({ start, text })));
+    expect(sung(file).lyrics).toEqual([
+      { start: 0, text: "down", newLine: true },
+      { start: 1, text: "by" },
+      { start: 2, text: "the" },
+      { start: 3, text: "sea" },
+    ]);
     expect(sung(read("x.abc", "X:1\nK:F#m\nFGA\n")).melody).toMatchObject({ home: "F#", mode: "minor" });
     expect(sung(read("x.abc", "X:1\nK:Bb\nBcd\n")).melody).toMatchObject({ home: "Bb", mode: "major" });
   });

@@ -1,65 +1,23 @@
-import { parseOnly } from "abcjs";
-import type { KeyName, Mode } from "../music/keyName";
-import type { WrittenFile, WrittenVoice } from "./melodyVoice";
+import { abcTunes } from "./abcBook";
+import { abcPartOrder } from "./abcSigns";
+import { type AbcPart, type AbcTune, readAbcTune } from "./abcTune";
+import { type AbcBarText, AbcTooLarge } from "./abcVoice";
+import type { MelodyNote } from "./melody";
+import type { MelodySyllable, WrittenFile, WrittenVoice } from "./melodyVoice";
+import { playingOrder } from "./repeats";
 
-/** The parts of a parsed tune that are read here. */
-interface AbcElement {
-  el_type: string;
-  type?: string;
-  startChar?: number;
-  decoration?: unknown;
-  gracenotes?: unknown;
-  chord?: unknown;
-  lyric?: { syllable?: string }[];
-}
-interface AbcTune {
-  lines: { staff?: { voices?: AbcElement[][] }[] }[];
-  metaText: { title?: string | { text?: string }[] };
-  getKeySignature(): { root?: string; acc?: string; mode?: string } | undefined;
-  setUpAudio(options: { chordsOff: boolean }): { tracks: AbcEvent[][] };
-}
-interface AbcEvent {
-  cmd: string;
-  type?: string;
-  text?: string;
-  pitch?: number;
-  start?: number;
-  duration?: number;
-  instrument?: number;
-  startChar?: number;
-}
-
-const mostTunes = 50;
-/**
- * Beyond these the parser takes time that grows with their square, or so much memory for one endless note that the whole
- * program stops; no song comes near them.
- */
-const most = {
-  characters: 200_000,
-  lines: 5_000,
-  notes: 20_000,
-  lineLength: 10_000,
-  signs: 2_000,
-  bars: 10_000,
-  overlays: 200,
-  restedBars: 2_000,
-  digits: 4,
-};
-/** Fine enough for tuplets of 3, 5 and 7 down to a sixty-fourth; undoes the parser's rounding to six places. */
-const grid = 6720;
-const modes: Record<string, Mode> = {
-  "": "major",
-  m: "minor",
-  dor: "dorian",
-  phr: "phrygian",
-  lyd: "lydian",
-  mix: "mixolydian",
-  loc: "locrian",
+const most = { characters: 2_000_000, tunes: 200, notes: 100_000 };
+/** Fine enough for tuplets of 3, 5, 7 and 9 down to a sixty-fourth; undoes the error of adding thirds. */
+const grid = 20_160;
+const tooLarge: WrittenFile = {
+  ok: false,
+  reason: "This ABC file holds too many notes or repeats, or lengths that no song has.",
 };
 
 /**
- * Reads tunes in ABC notation: ties joined, repeats and endings unrolled, grace notes and ornaments left out,
- * octave clefs and transposing voices as they sound.
+ * Reads tunes in ABC notation: ties joined, repeats, endings and the order of parts unrolled, grace notes and ornaments
+ * left out, octave clefs and transposing voices as they sound. Words marked D.C. or D.S. are not followed, because the
+ * standard gives them no meaning for a player.
  *
  * @param text the file's text; several tunes (X:) become several voices
  * @returns the voices as written, or why the text cannot be read
@@ -67,105 +25,144 @@ const modes: Record<string, Mode> = {
  */
 export function readAbc(text: string): WrittenFile {
   if (!/^\s*K:/m.test(text)) return { ok: false, reason: "This is no ABC tune: its K: line is missing." };
-  const book = firstTunes(text);
-  if (!sizeOfASong(book))
-    return { ok: false, reason: "This ABC file holds too many notes or signs, or lengths that no song has." };
+  if (text.length > most.characters) return tooLarge;
   try {
-    const tunes = parseOnly(book) as unknown as AbcTune[];
-    const voices = tunes.flatMap((tune) => readTune(tune, tunes.length > 1));
-    if (voices.every((voice) => voice.notes.length === 0))
-      return { ok: false, reason: "There are no notes in this ABC file." };
-    return { ok: true, title: tunes[0] ? titleOf(tunes[0]) : null, voices };
-  } catch {
-    return { ok: false, reason: "This ABC file cannot be read; something in its notes is malformed." };
-  }
-}
-
-/** What stands before the first tune, and the first tunes of a book, without directives: they shape pages and players. */
-function firstTunes(text: string): string {
-  const starts = [...text.matchAll(/^X:/gm)].map((match) => match.index);
-  return text.slice(0, starts[mostTunes] ?? text.length).replace(/^%%.*$/gm, "%");
-}
-
-function sizeOfASong(text: string): boolean {
-  const lines = text.split("\n");
-  const music = lines.filter((line) => !/^\s*(?:[A-Zw+]:|%)/.test(line)).join("\n");
-  const lengths = lines.filter((line) => /^\s*[LMQ]:/.test(line)).join("\n") + music.replace(/"[^"\n]*"/g, "");
-  const restedBars = [...music.matchAll(/[ZX](\d+)/g)].reduce((sum, match) => sum + Number(match[1]), 0);
-  const count = (signs: RegExp) => music.match(signs)?.length ?? 0;
-  return (
-    text.length <= most.characters &&
-    lines.length <= most.lines &&
-    lines.every((line) => line.length <= most.lineLength) &&
-    count(/[A-Ga-g]/g) <= most.notes &&
-    count(/[{}!"+]/g) <= most.signs * 4 &&
-    count(/\|/g) <= most.bars &&
-    count(/[{]/g) <= most.signs &&
-    count(/&/g) <= most.overlays &&
-    restedBars <= most.restedBars &&
-    !/[<>]{4}/.test(music) &&
-    !/\/\s*0/.test(lengths) &&
-    !(lengths.match(/\d+/g) ?? []).some((number) => number.length > most.digits)
-  );
-}
-
-function readTune(tune: AbcTune, several: boolean): WrittenVoice[] {
-  const syllables = new Map<number, string>();
-  for (const line of tune.lines) {
-    for (const staff of line.staff ?? []) {
-      staff.voices = (staff.voices ?? []).map((voice) => voice.filter((element) => element.el_type !== "tempo"));
-      // Unrolling loses a last note that no bar line follows.
-      if (line === tune.lines.at(-1))
-        for (const voice of staff.voices) voice.push({ el_type: "bar", type: "bar_thin" });
-      for (const element of staff.voices.flat()) {
-        delete element.gracenotes;
-        delete element.decoration;
-        const text = element.lyric?.[0]?.syllable;
-        if (text && element.startChar !== undefined) syllables.set(element.startChar, text);
+    const tunes = abcTunes(text, most.tunes).map(readAbcTune);
+    const voices: WrittenVoice[] = [];
+    let notes = 0;
+    for (const tune of tunes) {
+      for (const voice of playTune(tune, tunes.length > 1)) {
+        notes += voice.notes.length;
+        if (notes > most.notes) return tooLarge;
+        voices.push(voice);
       }
     }
-  }
-  const title = titleOf(tune);
-  const { tracks } = tune.setUpAudio({ chordsOff: true });
-  return tracks.map((track, index) => {
-    const written = track.find((event) => event.cmd === "text" && event.type === "name")?.text?.trim();
-    const own = written || (tracks.length > 1 ? `Voice ${index + 1}` : (title ?? "Tune"));
-    const sounding = track.filter(
-      ({ cmd, pitch = -1, duration = 0 }) => cmd === "note" && pitch >= 0 && pitch <= 127 && duration > 0,
-    );
-    const notes = sounding.map((event) => {
-      const start = onGrid((event.start ?? 0) * 4);
-      return { start, duration: onGrid((event.start ?? 0) * 4 + event.duration! * 4) - start, midi: event.pitch! };
-    });
-    const lyrics = sounding.flatMap((event) => {
-      const text = event.startChar === undefined ? undefined : syllables.get(event.startChar);
-      return text ? [{ start: onGrid((event.start ?? 0) * 4), text }] : [];
-    });
+    if (notes === 0) return { ok: false, reason: "There are no notes in this ABC file." };
+    const [first] = tunes;
     return {
-      name: several && title !== null && own !== title ? `${title}, ${own}` : own,
-      notes: notes.filter((note) => note.duration > 0),
-      lyrics,
-      key: keyOf(tune),
-      signature: null,
-      program: null,
-      percussion: false,
+      ok: true,
+      title: first?.title ?? null,
+      voices,
+      tempo: first?.tempo ?? null,
+      beatsPerBar: first?.beatsPerBar ?? null,
     };
+  } catch (error) {
+    if (error instanceof AbcTooLarge) return tooLarge;
+    throw error;
+  }
+}
+
+function playTune(tune: AbcTune, several: boolean): WrittenVoice[] {
+  const parts = tune.parts.filter(({ voice }) => voice.bars.some((bar) => bar.notes.length > 0));
+  const first = parts[0]?.voice.bars ?? [];
+  return parts.flatMap((part, index) => {
+    const { bars } = part.voice;
+    // Some write repeats into the first voice only.
+    const bare = bars.every(({ signs }) => !signs.repeatEnd && !signs.endingStart) && bars.length === first.length;
+    const order = orderOf(bare ? first : bars, tune.order);
+    const fallback = parts.length > 1 ? `Voice ${index + 1}` : (tune.title ?? "Tune");
+    const own = part.name ?? fallback;
+    const name = several && tune.title !== null && own !== tune.title ? `${tune.title}, ${own}` : own;
+    return playVoice(part, order, name, tune);
+  });
+}
+
+/** Indices of the bars in the order they are played. */
+function orderOf(bars: readonly AbcBarText[], parts: string | null): number[] {
+  const signs = withStarts(bars);
+  const labels = new Set(bars.map((bar) => bar.part));
+  const wanted = parts === null || labels.size < 2 ? null : abcPartOrder(parts);
+  if (parts !== null && labels.size >= 2 && wanted === null) throw new AbcTooLarge();
+  const sections = wanted?.filter((label) => labels.has(label)) ?? [];
+  if (sections.length === 0) {
+    const order = playingOrder(signs);
+    if (!order) throw new AbcTooLarge();
+    return order;
+  }
+  if (labels.has("")) sections.unshift("");
+  return sections.flatMap((label) => {
+    const places = bars.flatMap((bar, index) => (bar.part === label ? [index] : []));
+    const order = playingOrder(places.map((place) => signs[place]!));
+    if (!order) throw new AbcTooLarge();
+    return order.map((place) => places[place]!);
+  });
+}
+
+/** A repeat without beginning starts at the latest double bar, repeat or beginning (standard 2.1, section 4.8). */
+function withStarts(bars: readonly AbcBarText[]): AbcBarText["signs"][] {
+  const signs = bars.map((bar) => ({ ...bar.signs }));
+  let open = false;
+  let latest = 0;
+  signs.forEach((sign, index) => {
+    if (sign.repeatStart) [open, latest] = [true, index];
+    // The second ending belongs to the passage that was open before it.
+    else if (sign.section && !open && !sign.endingStart) latest = index;
+    if (sign.repeatEnd) {
+      if (!open && latest > 0) signs[latest]!.repeatStart = true;
+      open = false;
+    }
+  });
+  return signs;
+}
+
+function playVoice(part: AbcPart, order: readonly number[], name: string, tune: AbcTune): WrittenVoice[] {
+  const { bars } = part.voice;
+  const layers = new Map<number, WrittenVoice>();
+  const ties = new Map<string, MelodyNote>();
+  const plays = new Map<number, number>();
+  const make = (layer: number): WrittenVoice => ({
+    name: layer === 0 ? name : `${name}, line ${layer + 1}`,
+    notes: [],
+    lyrics: [],
+    key: tune.key,
+    signature: null,
+    program: part.program,
+    percussion: part.percussion,
+  });
+  layers.set(0, make(0));
+  let begin = 0;
+  let total = 0;
+  for (const index of order) {
+    const bar = bars[index];
+    if (!bar) continue;
+    const played = plays.get(index) ?? 0;
+    plays.set(index, played + 1);
+    total += bar.notes.length;
+    if (total > most.notes || begin > 100_000) throw new AbcTooLarge();
+    for (const note of bar.notes) {
+      if (!layers.has(note.layer)) layers.set(note.layer, make(note.layer));
+      const start = onGrid(begin + note.start);
+      const duration = onGrid(begin + note.start + note.duration) - start;
+      if (duration <= 0) continue;
+      const pitch = `${note.layer}/${note.midi}`;
+      const tied = ties.get(pitch);
+      ties.delete(pitch);
+      if (tied && Math.abs(tied.start + tied.duration - start) < 1e-6) {
+        tied.duration = start + duration - tied.start;
+        if (note.tied) ties.set(pitch, tied);
+        continue;
+      }
+      const sung = { start, duration, midi: note.midi };
+      layers.get(note.layer)!.notes.push(sung);
+      if (note.tied) ties.set(pitch, sung);
+    }
+    layers.get(0)!.lyrics.push(...syllablesOf(bar, played, begin));
+    begin += bar.length;
+  }
+  return [...layers.values()].filter((voice) => voice.notes.length > 0);
+}
+
+/** Each time a bar is played, its next verse is sung. */
+function syllablesOf(bar: AbcBarText, played: number, begin: number): MelodySyllable[] {
+  return bar.words.flatMap(({ start, verses }) => {
+    const syllable = played < verses.length ? verses[played] : verses[0];
+    if (!syllable || syllable.text === "") return [];
+    return [
+      { start: onGrid(begin + start), text: syllable.text, ...(syllable.newLine ? { newLine: true as const } : {}) },
+    ];
   });
 }
 
 function onGrid(quarters: number): number {
   return Math.round(quarters * grid) / grid;
-}
-
-function titleOf(tune: AbcTune): string | null {
-  const { title } = tune.metaText;
-  const text = typeof title === "string" ? title : title?.map((part) => part.text ?? "").join("");
-  return text?.trim() || null;
-}
-
-function keyOf(tune: AbcTune): KeyName | null {
-  const key = tune.getKeySignature();
-  if (!key || !/^[A-G]$/.test(key.root ?? "")) return null;
-  const mode = modes[(key.mode ?? "").toLowerCase()];
-  return mode ? { tonic: `${key.root}${key.acc ?? ""}`, mode } : null;
 }

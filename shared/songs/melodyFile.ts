@@ -1,20 +1,33 @@
 import { keyFifths } from "../music/keyName";
 import { readAbc } from "./abcMelody";
 import { rankKeys } from "./findKey";
-import type { Melody } from "./melody";
-import { type MelodyVoice, type WrittenFile, type WrittenVoice, singleLine, vocalLikelihood } from "./melodyVoice";
+import type { Melody, MelodyNote } from "./melody";
+import { type MelodyVoice, type WrittenFile, type WrittenVoice, singleLine } from "./melodyVoice";
 import { readMidi } from "./midiMelody";
 import { readMusicXml } from "./musicXmlMelody";
 import { unpackMxl } from "./mxlArchive";
 import { decodeText } from "./textBytes";
+import { vocalLikelihood } from "./vocalLikelihood";
 
 /** What a melody file holds: its voices, and which of them is proposed as the sung one. */
 export type MelodyFile =
-  { ok: true; voices: MelodyVoice[]; proposed: number; title: string | null } | { ok: false; reason: string };
+  | {
+      ok: true;
+      voices: MelodyVoice[];
+      proposed: number;
+      title: string | null;
+      /** quarter notes a minute at the beginning; null where the file states no speed */
+      tempo: number | null;
+      /** beats of a bar at the beginning as the metre counts them (3 in 3/4, 6 in 6/8); null where none is stated */
+      beatsPerBar: number | null;
+    }
+  | { ok: false; reason: string };
 
 const mostBytes = 5_000_000;
 const mostNotes = 10_000;
 const mostVoices = 64;
+/** of one syllable */
+const mostLetters = 100;
 
 /**
  * Reads a melody from a Standard MIDI File, a MusicXML score (plain or compressed) or ABC notation. The kind is told
@@ -39,9 +52,19 @@ export function readMelodyFile(name: string, bytes: Uint8Array): MelodyFile {
       filled.length === 0 ? "There are no notes in this file." : "No voice of this file has fewer than 10,000 notes.";
     return { ok: false, reason };
   }
-  const points = kept.map(vocalLikelihood);
-  const proposed = points.indexOf(Math.max(...points));
-  return { ok: true, voices: kept.map(finished), proposed, title: written.title };
+  const likelihoods = kept.map(vocalLikelihood);
+  const points = likelihoods.map((likelihood) => likelihood.points);
+  return {
+    ok: true,
+    voices: kept.map((voice, index) => finished(voice, likelihoods[index]!.reasons)),
+    proposed: points.indexOf(Math.max(...points)),
+    title: written.title,
+    tempo: written.tempo !== null && written.tempo >= 20 && written.tempo <= 400 ? round(written.tempo) : null,
+    beatsPerBar:
+      written.beatsPerBar !== null && written.beatsPerBar >= 1 && written.beatsPerBar <= 16
+        ? written.beatsPerBar
+        : null,
+  };
 }
 
 function readWritten(name: string, bytes: Uint8Array): WrittenFile {
@@ -60,12 +83,17 @@ function readWritten(name: string, bytes: Uint8Array): WrittenFile {
   return { ok: false, reason: "This kind of file is not known. MIDI, MusicXML and ABC files can be read." };
 }
 
-function finished(voice: WrittenVoice): MelodyVoice {
-  const notes = singleLine(voice.notes);
-  const starts = new Set(notes.map((note) => note.start));
-  const lyrics = voice.lyrics.filter((word) => starts.has(word.start));
+function finished(voice: WrittenVoice, reasons: string[]): MelodyVoice {
+  const line = singleLine(voice.notes);
+  const starts = new Set(line.map((note) => note.start));
+  const lyrics = voice.lyrics.filter((syllable) => starts.has(syllable.start));
+  const syllables = new Map(lyrics.map(({ start, text }) => [start, text.slice(0, mostLetters)]));
+  const notes = line.map((note): MelodyNote => {
+    const lyric = syllables.get(note.start);
+    return lyric === undefined ? note : { ...note, lyric };
+  });
   const melody: Melody = { notes, ...homeOf(voice, notes) };
-  return { name: voice.name, melody, stated: voice.key, ...(lyrics.length > 0 ? { lyrics } : {}) };
+  return { name: voice.name, melody, stated: voice.key, reasons, ...(lyrics.length > 0 ? { lyrics } : {}) };
 }
 
 /** What the file says; where it names only a signature, or nothing, the notes themselves are asked. */
@@ -78,4 +106,8 @@ function homeOf(voice: WrittenVoice, notes: Melody["notes"]): Pick<Melody, "home
 
 function startsWith(bytes: Uint8Array, tag: string): boolean {
   return [...tag].every((character, index) => bytes[index] === character.charCodeAt(0));
+}
+
+function round(tempo: number): number {
+  return Math.round(tempo * 10) / 10;
 }

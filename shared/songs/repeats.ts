@@ -85,7 +85,9 @@ function lastEnding(endings: readonly (number[] | null)[], from: number): number
   return last;
 }
 
+/** How often a passage is played: as often as its endings have numbers, counted from the one that repeats. */
 function times(signs: readonly MeasureSigns[], endings: readonly (number[] | null)[], index: number): number {
-  const own = endings[index];
-  return own ? Math.max(signs[index]!.repeatEnd ?? 2, ...lastEnding(endings, index)) : (signs[index]!.repeatEnd ?? 2);
+  let most = signs[index]!.repeatEnd ?? 2;
+  for (let at = index; endings[at]; at += 1) most = Math.max(most, ...endings[at]!);
+  return most;
 }

@@ -8,7 +8,7 @@ import { Text } from "@/features/ui/Text";
 import { colors } from "@/features/ui/theme";
 import { glyphs, noteName } from "@/shared/music/pitch";
 import type { MelodyVoice } from "@/shared/songs/melodyVoice";
-import { readMelody } from "./readMelody";
+import { readSongFile } from "./readSongFile";
 import type { DraftMelody, SongDraft } from "../editor/songDraft";
 
 export interface MelodyFileFieldProps {
@@ -35,7 +35,7 @@ export function MelodyFileField({ melody, error, onChange }: MelodyFileFieldProp
   const read = async (given: File) => {
     setReading(true);
     setRefusal(null);
-    const result = await readMelody(given);
+    const result = await readSongFile(given);
     setReading(false);
     if (result.ok) choose(given.name, result.voices, result.proposed);
     else setRefusal(`${given.name}: ${result.reason}`);

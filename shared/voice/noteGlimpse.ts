@@ -68,7 +68,10 @@ export function createNoteGlimpse(sampleRate: number): NoteGlimpse {
       if (seen === null || !last) return ahead;
       if (last.hz !== null) {
         const away = Math.abs(seen - 69 - 12 * Math.log2(last.hz / 440));
-        if (away < OTHER_NOTE_SEMITONES || LEFT_TO_TRACKER.some((multiple) => Math.abs(away - multiple) < NEAR_MULTIPLE)) {
+        if (
+          away < OTHER_NOTE_SEMITONES ||
+          LEFT_TO_TRACKER.some((multiple) => Math.abs(away - multiple) < NEAR_MULTIPLE)
+        ) {
           return ahead;
         }
       }

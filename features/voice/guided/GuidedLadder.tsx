@@ -5,7 +5,7 @@ import { isNatural } from "@/features/span/ladderGeometry";
 import { SvgLabel } from "@/features/ui/SvgLabel";
 import { colors, mixtures } from "@/features/ui/theme";
 import { noteWord } from "../noteWords";
-import { useHeard } from "../sing/useHeard";
+import { useHeard } from "../listening/useHeard";
 import type { LiveSound } from "../recorder/liveSound";
 import { holdNow } from "./guidedHold";
 import type { GuidedRun } from "./guidedSteps";

@@ -6,7 +6,7 @@ import { Screen } from "@/features/ui/Screen";
 import { Text } from "@/features/ui/Text";
 import { colors, mixtures } from "@/features/ui/theme";
 import { useLayout } from "@/features/ui/useLayout";
-import { useHeard } from "../sing/useHeard";
+import { useHeard } from "../listening/useHeard";
 import type { LiveSound } from "../recorder/liveSound";
 import { enoughHoldS, holdNow, leastHoldS } from "./guidedHold";
 import { GuidedLadder } from "./GuidedLadder";

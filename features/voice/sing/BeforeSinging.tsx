@@ -6,7 +6,7 @@ import { Screen } from "@/features/ui/Screen";
 import { Text } from "@/features/ui/Text";
 import { colors } from "@/features/ui/theme";
 import { webProps } from "@/features/ui/webStyle";
-import { useCountInSetting } from "./countInSetting";
+import { useCountInSetting } from "../listening/countInSetting";
 import { OtherWays } from "./OtherWays";
 
 export interface BeforeSingingProps {

@@ -7,6 +7,7 @@ import { Screen } from "@/features/ui/Screen";
 import { Text } from "@/features/ui/Text";
 import { colors, mixtures, sizes } from "@/features/ui/theme";
 import { useLayout } from "@/features/ui/useLayout";
+import { HeldSoFar } from "./HeldSoFar";
 import { noteNow, type NoteNow } from "./noteNow";
 import { noteWord } from "../noteWords";
 import { timeOf, type LiveSound } from "../recorder/liveSound";
@@ -22,8 +23,12 @@ export interface ListeningScreenProps {
 
 /** Room for the head, the note, level, time and Stop; the trail has what is left. */
 const aroundTrail = 56 + 72 + 224;
+/** On a wide page only the head stands over the trail; the rest has a column of its own. */
+const aroundWideTrail = 132 + 40;
+const sideWidth = 344;
+const underLadder = 72 + 24 + 210;
 
-/** Level and time are read at a glance, also on a wide page. */
+/** Level and time are read at a glance, also where the page is broad. */
 const widestRows = 600;
 
 /** What is measured ends this long before the sound does: half a window, and the block on its way. */
@@ -31,21 +36,50 @@ const behindS = 0.045;
 
 /** While singing: the note, the trail, how loud and how long, and Stop under the thumb. */
 export function ListeningScreen({ live, seconds, stopping, onStop }: ListeningScreenProps) {
-  const phone = useLayout() === "phone";
+  const layout = useLayout();
   const { height } = useWindowDimensions();
+  const head = {
+    title: "Listening",
+    subtitle: "Any song you know, no instrument",
+    back: "/voice",
+    closes: true,
+  } as const;
+  const readings = (
+    <>
+      <LiveLevel live={live} />
+      <TimeRow seconds={seconds} />
+      <Text variant="small" tone="soft" style={{ marginTop: -6, paddingLeft: 56 }}>
+        {`${enoughTakeS} s is enough. More is surer, up to ${longestTakeS} s.`}
+      </Text>
+      <StopButton stopping={stopping} onStop={onStop} />
+    </>
+  );
+  if (layout === "wide") {
+    const trail = Math.max(420, Math.min(840, height - aroundWideTrail));
+    return (
+      <Screen {...head} hideBar wide>
+        <View style={{ flexDirection: "row", gap: 48 }}>
+          <View style={{ flexGrow: 1, flexBasis: 0 }}>
+            <LiveTrail live={live} height={trail} />
+          </View>
+          <View style={{ width: sideWidth, gap: 24 }}>
+            <NoteWords live={live} />
+            <HeldSoFar live={live} width={sideWidth} height={Math.max(200, trail - underLadder)} />
+            <View style={{ gap: 14 }}>{readings}</View>
+          </View>
+        </View>
+      </Screen>
+    );
+  }
+  const phone = layout === "phone";
   return (
-    <Screen title="Listening" subtitle="Any song you know, no instrument" back="/voice" closes hideBar>
+    <Screen {...head} hideBar>
       <NoteWords live={live} />
       <View style={{ marginTop: 12, marginHorizontal: phone ? -sizes.gutterPhone : 0 }}>
         <LiveTrail live={live} height={Math.max(220, Math.min(560, height - aroundTrail - (phone ? 0 : 40)))} />
       </View>
       <View style={{ gap: 14, paddingTop: 16, marginTop: "auto", width: "100%", maxWidth: widestRows }}>
-        <LiveLevel live={live} />
-        <TimeRow seconds={seconds} />
-        <Text variant="small" tone="soft" style={{ marginTop: -6, paddingLeft: 56 }}>
-          {`${enoughTakeS} s is enough. More is surer, up to ${longestTakeS} s.`}
-        </Text>
-        <StopButton stopping={stopping} onStop={onStop} />
+        {readings}
       </View>
     </Screen>
   );

@@ -30,6 +30,8 @@ interface Collection {
   spoiled: string;
   /** fields with a value of their own where nothing was sent */
   byDefault?: string[];
+  /** what the server counts up when an item is changed */
+  changed?: object;
 }
 
 const collections: Collection[] = [
@@ -48,6 +50,7 @@ const collections: Collection[] = [
     change: { tune: { kind: "span", lowMidi: 62, highMidi: 76, home: "G" }, tempo: null },
     spoil: { tune: { kind: "span", lowMidi: 62, highMidi: 60, home: "G" } },
     spoiled: "tune",
+    changed: { revision: 2 },
   },
   {
     name: "decisions",
@@ -65,7 +68,7 @@ const collections: Collection[] = [
   },
 ];
 
-describe.each(collections)("$name", ({ name, make, change, spoil, spoiled, byDefault = [] }) => {
+describe.each(collections)("$name", ({ name, make, change, spoil, spoiled, byDefault = [], changed: counted = {} }) => {
   const at = (id: string) => `/api/${name}/${id}`;
 
   it("keeps an item exactly as it was sent and gives it back, alone and in the list", async () => {
@@ -89,8 +92,9 @@ describe.each(collections)("$name", ({ name, make, change, spoil, spoiled, byDef
     const item = make();
     await owner.put(at(item.id), item).expect(201);
     const place = (await owner.get(`/api/${name}`)).body.findIndex(({ id }: { id: string }) => id === item.id);
-    const changed = { ...item, ...change };
-    await owner.put(at(item.id), changed).expect(200);
+    const changed = { ...item, ...change, ...counted };
+    const answer = await owner.put(at(item.id), { ...item, ...change }).expect(200);
+    expect(answer.body).toEqual(changed);
     expect((await owner.get(`/api/${name}`)).body[place]).toEqual(changed);
   });
 

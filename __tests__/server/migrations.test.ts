@@ -8,7 +8,12 @@ beforeEach(async () => {
 });
 afterEach(() => database.drop());
 
-const names = ["FirstTables1764547200000", "KindOfTake1767225600000", "SongRevisions1769904000000"];
+const names = [
+  "FirstTables1764547200000",
+  "KindOfTake1767225600000",
+  "SongRevisions1769904000000",
+  "SongVersions1772323200000",
+];
 const applied = () => database.query("SELECT name FROM migrations ORDER BY id");
 const tables = async () => {
   const rows = await database.query("SELECT table_name FROM information_schema.tables WHERE table_schema = 'public'");
@@ -57,11 +62,15 @@ it("gives songs that were kept before they had revisions their first, and no tag
     database.query(`
       WITH person AS (INSERT INTO users (email, password_hash) VALUES ('a@orlow-quay.example', 'none') RETURNING id)
       INSERT INTO songs (id, user_id, title, chart, created_at)
-      SELECT gen_random_uuid(), id, 'Slack Water', 'Low tide', now() FROM person`),
+      SELECT gen_random_uuid(), id, 'Slack Water', 'D  A' || chr(10) || 'Low tide', now() FROM person`),
   );
   expect(await database.query("SELECT title, tags, archived_at, played_at, revision FROM songs")).toEqual([
     { title: "Slack Water", tags: [], archived_at: null, played_at: null, revision: 1 },
   ]);
+  expect(await database.query("SELECT title_key, search_text, first_words, span FROM songs")).toEqual([
+    { title_key: "slack water", search_text: "slack water\nlow tide", first_words: "Low tide", span: null },
+  ]);
+  expect(await database.query("SELECT changed_at = saved_at AS same FROM songs")).toEqual([{ same: true }]);
 });
 
 it("can be taken back, one after the other", async () => {

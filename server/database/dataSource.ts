@@ -9,6 +9,7 @@ import { VoiceEntity } from "../voices/voice.entity";
 import { FirstTables1764547200000 } from "./migrations/FirstTables1764547200000";
 import { KindOfTake1767225600000 } from "./migrations/KindOfTake1767225600000";
 import { SongRevisions1769904000000 } from "./migrations/SongRevisions1769904000000";
+import { SongVersions1772323200000 } from "./migrations/SongVersions1772323200000";
 
 const common: Pick<
   Extract<DataSourceOptions, { type: "postgres" }>,
@@ -48,7 +49,12 @@ export function createMigrationSource(url: string): DataSource {
     poolSize: 1,
     connectTimeoutMS: 3000,
     poolErrorHandler: () => undefined,
-    migrations: [FirstTables1764547200000, KindOfTake1767225600000, SongRevisions1769904000000],
+    migrations: [
+      FirstTables1764547200000,
+      KindOfTake1767225600000,
+      SongRevisions1769904000000,
+      SongVersions1772323200000,
+    ],
     migrationsTransactionMode: "all",
   });
 }

@@ -16,6 +16,7 @@ import { hashPassword } from "../auth/passwords";
 import { UserEntity } from "../auth/user.entity";
 import { InstrumentEntity } from "../instruments/instrument.entity";
 import { DecisionEntity } from "../keys/decision.entity";
+import { listingColumns } from "../songs/listingColumns";
 import { SongEntity } from "../songs/song.entity";
 import { TakeEntity } from "../voices/take.entity";
 import { VoiceEntity } from "../voices/voice.entity";
@@ -71,7 +72,7 @@ async function move(manager: EntityManager, person: DemoPerson, passwordHash: st
   await manager.insert(InstrumentEntity, { ...instrument, userId });
   await manager.insert(
     SongEntity,
-    songs.map((song) => ({ ...song, userId })),
+    songs.map((song) => ({ ...song, ...listingColumns(song), userId })),
   );
   const decisions = songs.flatMap((song) => decide(song, voice, takes, instrument) ?? []);
   await manager.insert(

@@ -8,11 +8,13 @@ export interface NamedSchema {
   schema: z.ZodType;
 }
 
-/** One possible answer of an operation; without a schema it has no body. */
+/** One possible answer of an operation; without a schema or a media type it has no body. */
 export interface Answer {
   description: string;
   schema?: NamedSchema;
   list?: boolean;
+  /** what is sent instead of JSON */
+  mediaType?: string;
 }
 
 /** One operation of the API as it is described to others. */
@@ -25,6 +27,8 @@ export interface Operation {
   /** needs an access token */
   signedIn: boolean;
   body?: NamedSchema;
+  /** what may stand behind the question mark; the handler reads it through the same schema */
+  query?: z.ZodObject;
   answers: Readonly<Record<number, Answer>>;
 }
 

@@ -19,6 +19,9 @@ export function databaseProblem(error: unknown): HttpProblem | null {
   if (code === "23503") return brokenReference(cause);
   if (code === "23505")
     return new HttpProblem(409, "conflict", "This was changed in another place at the same time. Try again.");
+  // Deadlock, serialization, lock not to be had, statement took too long.
+  if (/^(40P01|40001|55P03|57014)$/.test(code))
+    return new HttpProblem(503, "busy", "The server is very busy. Nothing was lost; try again in a moment.");
   // Class 22: text or numbers that no column can hold, such as a NUL character.
   if (/^22...$/.test(code))
     return new HttpProblem(422, "invalid", "This holds characters or numbers that cannot be stored.");

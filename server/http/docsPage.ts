@@ -50,7 +50,7 @@ export function docsPage(document: OpenApiDocument): string {
 <title>${text(info.title)}: the API</title><style>${style}</style></head>
 <body><main><h1>${text(info.title)}: the API</h1>
 <p>${text(info.description)}</p>
-<p>Everything is JSON. Errors say a stable code, a sentence, and the fields to mend. The same for programs: <a href="openapi.json">openapi.json</a>.</p>
+<p>Everything is JSON, unless it says otherwise. Errors say a stable code, a sentence, and the fields to mend. The same for programs: <a href="openapi.json">openapi.json</a>.</p>
 <nav aria-label="Parts">${links.join("")}<a href="#schemas">Schemas</a></nav>
 ${sections.join("\n")}
 <section><h2 id="schemas">Schemas</h2>${schemas.join("\n")}</section>
@@ -61,17 +61,23 @@ ${sections.join("\n")}
 function described(method: string, path: string, operation: DescribedOperation): string {
   const access = operation.security.length > 0 ? "Needs an access token." : "Open to everybody.";
   const body = operation.requestBody ? `<p>Send ${schemaLink(operation.requestBody.content)}.</p>` : "";
+  const asked = (operation.parameters ?? []).filter((parameter) => parameter.in === "query");
+  const query =
+    asked.length > 0
+      ? `<p>May be asked for: ${asked.map(({ name }) => `<code>${text(String(name))}</code>`).join(", ")}.</p>`
+      : "";
   const answers = Object.entries(operation.responses).map(
     ([status, { description, content }]) =>
       `<tr><th scope="row">${status}</th><td>${text(description)}</td><td>${content ? schemaLink(content) : ""}</td></tr>`,
   );
   return `<details id="${text(operation.operationId)}"><summary><b class="${method}">${method}</b><code>/api${text(path)}</code><span>${text(operation.summary)}</span></summary>
-<div class="inside"><p>${access}</p>${body}<table>${answers.join("")}</table></div></details>`;
+<div class="inside"><p>${access}</p>${query}${body}<table>${answers.join("")}</table></div></details>`;
 }
 
 /** Schemas stand in the text by name; "all of" names a list. */
 function schemaLink(content: Record<string, unknown>): string {
-  const name = /#\/components\/schemas\/(\w+)/.exec(JSON.stringify(content))?.[1] ?? "";
+  const name = /#\/components\/schemas\/(\w+)/.exec(JSON.stringify(content))?.[1];
+  if (name === undefined) return text(Object.keys(content).join(", "));
   const many = JSON.stringify(content).includes('"array"');
   return `${many ? "a list of " : ""}<a href="#schema-${name}">${name}</a>`;
 }

@@ -13,6 +13,9 @@ const bodyAnswers: Record<number, Answer> = {
     description: "Does not fit the schema (invalid), or refers to something not in this account (unknown-reference).",
   },
 };
+const queryAnswers: Record<number, Answer> = {
+  422: { description: "What stands behind the question mark does not fit the schema (invalid)." },
+};
 const signedInAnswers: Record<number, Answer> = { 401: { description: "No valid access token (no-session)." } };
 
 /** What OpenAPI 3.1 calls the API: every operation that was registered, with schemas made from the contracts. */
@@ -49,20 +52,18 @@ export function openApiDocument(operations: readonly Operation[]): OpenApiDocume
   const describe = (operation: Operation): DescribedOperation => {
     const answers = {
       ...(operation.signedIn ? signedInAnswers : {}),
+      ...(operation.query ? queryAnswers : {}),
       ...(operation.body ? bodyAnswers : {}),
       ...operation.answers,
     };
     const responses = Object.entries(answers).map(([status, answer]) => {
       const schema = answer.schema ?? (Number(status) >= 400 ? problemSchema : null);
-      const body = schema && (answer.list ? { type: "array", items: reference(schema) } : reference(schema));
-      return [status, { description: answer.description, ...(body ? { content: content(body) } : {}) }] as const;
+      const { description, list, mediaType } = answer;
+      const body = schema && (list ? { type: "array", items: reference(schema) } : reference(schema));
+      const sent = mediaType ? { [mediaType]: {} } : body && content(body);
+      return [status, { description, ...(sent ? { content: sent } : {}) }] as const;
     });
-    const parameters = [...operation.path.matchAll(/:(\w+)/g)].map(([, name]) => ({
-      name,
-      in: "path",
-      required: true,
-      schema: { type: "string", format: "uuid" },
-    }));
+    const parameters = [...pathParameters(operation), ...queryParameters(operation)];
     return {
       operationId: `${operation.method}${operation.path.replace(/[/:-]+(\w)/g, (_, letter: string) => letter.toUpperCase())}`,
       tags: [operation.tag],
@@ -92,4 +93,20 @@ export function openApiDocument(operations: readonly Operation[]): OpenApiDocume
     paths,
     components: { schemas, securitySchemes: { accessToken: { type: "http", scheme: "bearer", bearerFormat: "JWT" } } },
   };
+}
+
+function pathParameters({ path }: Operation): Json[] {
+  const names = [...path.matchAll(/:(\w+)/g)].map(([, name]) => name);
+  return names.map((name) => ({ name, in: "path", required: true, schema: { type: "string", format: "uuid" } }));
+}
+
+function queryParameters({ query }: Operation): Json[] {
+  if (!query) return [];
+  const { properties = {}, required = [] } = z.toJSONSchema(query, { io: "input" });
+  return Object.entries(properties).map(([name, schema]) => ({
+    name,
+    in: "query",
+    required: required.includes(name),
+    schema,
+  }));
 }

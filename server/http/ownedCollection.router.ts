@@ -1,12 +1,12 @@
 import { z } from "zod";
 import type { OwnedEntity } from "../database/owned.entity";
-import type { Api, NamedSchema } from "./api";
+import type { Answer, Api, NamedSchema } from "./api";
 import { currentUserId } from "./currentUser";
 import { HttpProblem, notFound } from "./httpProblem";
 import type { OwnedCollection } from "./ownedCollection.service";
 import { parse } from "./parse";
 
-interface CollectionContract<Item> extends NamedSchema {
+interface CollectionContract<Item, Wishes> extends NamedSchema {
   schema: z.ZodType<Item>;
   /** the collection's name in addresses */
   plural: string;
@@ -14,23 +14,31 @@ interface CollectionContract<Item> extends NamedSchema {
   noun: string;
   /** what goes with an item when it is removed */
   removes?: string;
+  /** what may be asked for when an item is saved, besides the item itself */
+  wishes?: z.ZodObject & z.ZodType<Wishes>;
+  /** answers to a save that only this collection gives */
+  refusals?: Readonly<Record<number, Answer>>;
+}
+
+/** The id in an address; what is no id leads nowhere. */
+export function idIn(params: Record<string, string>, name: string, noun: string): string {
+  const id = z.uuid().safeParse(params[name]);
+  if (!id.success) throw notFound(noun);
+  return id.data.toLowerCase();
 }
 
 /** The five routes that every collection of one's own has. */
-export function ownedCollectionRoutes<Item extends { id: string }, Row extends Item & OwnedEntity>(
+export function ownedCollectionRoutes<Item extends { id: string }, Row extends Item & OwnedEntity, Wishes = object>(
   api: Api,
-  contract: CollectionContract<Item>,
-  items: OwnedCollection<Item, Row>,
+  contract: CollectionContract<Item, Wishes>,
+  items: OwnedCollection<Item, Row, Wishes>,
 ): void {
-  const { plural, noun, removes } = contract;
+  const { plural, noun, removes, wishes, refusals } = contract;
   const common = { tag: plural, signedIn: true } as const;
   const one = `/${plural}/:id`;
   const missing = { description: `There is no such ${noun} in this account.` };
-  const idOf = (params: Record<string, string>) => {
-    const id = z.uuid().safeParse(params.id);
-    if (!id.success) throw notFound(noun);
-    return id.data.toLowerCase();
-  };
+  const full = { description: `This account holds as many ${plural} as it may (collection-full).` };
+  const idOf = (params: Record<string, string>) => idIn(params, "id", noun);
 
   api.route(
     {
@@ -63,10 +71,13 @@ export function ownedCollectionRoutes<Item extends { id: string }, Row extends I
       path: one,
       summary: `Save the ${noun} under an id of your making; may be repeated`,
       body: contract,
+      ...(wishes ? { query: wishes } : {}),
       answers: {
         200: { description: "Replaced.", schema: contract },
         201: { description: "Created.", schema: contract },
         404: missing,
+        409: full,
+        ...refusals,
       },
     },
     async (req, res) => {
@@ -77,9 +88,9 @@ export function ownedCollectionRoutes<Item extends { id: string }, Row extends I
           { path: "id", message: "Must be the id in the address." },
         ]);
       }
-      const userId = currentUserId(res);
-      const created = await items.put(userId, { ...item, id });
-      res.status(created ? 201 : 200).json(await items.get(userId, id));
+      const asked = wishes ? parse(wishes, req.query, "This cannot be asked for.") : ({} as Wishes);
+      const saved = await items.put(currentUserId(res), { ...item, id }, asked);
+      res.status(saved.created ? 201 : 200).json(saved.item);
     },
   );
   api.route(

@@ -2,85 +2,126 @@ import type { DataSource, EntityManager, QueryDeepPartialEntity } from "typeorm"
 import type { OwnedEntity } from "../database/owned.entity";
 import { HttpProblem, notFound } from "./httpProblem";
 
-/** Enough for a life of songs, too few to fill a disk. */
+/** Enough for a life, too few to fill a disk. */
 const mostItems = 2000;
 
-interface Options<Item> {
+/** An item on its way in, in a transaction in which nobody else writes to this account. */
+export interface Saving<Item, Wishes> {
+  manager: EntityManager;
+  userId: string;
+  item: Item;
+  /** what this account holds under the same id */
+  kept: Item | null;
+  /** what the address asked for besides */
+  wishes: Wishes;
+}
+
+interface Options<Item, Wishes> {
   /** one item, in words */
   noun: string;
-  /** runs in the same transaction, before the item is written */
-  beforeSave?: (manager: EntityManager, userId: string, item: Item) => Promise<void>;
+  /** Runs before the item is written and gives what to write; null leaves what is kept as it is. */
+  beforeSave?: (saving: Saving<Item, Wishes>) => Promise<Item | null>;
   mostItems?: number;
 }
 
 /** Items that belong to one person. Another person's item is as if it did not exist. */
-export class OwnedCollection<Item extends { id: string }, Row extends Item & OwnedEntity> {
+export class OwnedCollection<Item extends { id: string }, Row extends Item & OwnedEntity, Wishes = object> {
   private readonly noun: string;
   private readonly limit: number;
 
   constructor(
     private readonly dataSource: DataSource,
     private readonly entity: new () => Row,
-    private readonly options: Options<Item>,
+    private readonly options: Options<Item, Wishes>,
   ) {
     this.noun = options.noun;
     this.limit = options.mostItems ?? mostItems;
   }
 
   async list(userId: string): Promise<Item[]> {
-    const rows = await this.rowsOf(userId).orderBy("item.savedAt").addOrderBy("item.id").getMany();
-    return rows.map((row) => this.toItem(row));
+    const rows = await rowsOf(this.dataSource.manager, this.entity, userId)
+      .orderBy("item.savedAt")
+      .addOrderBy("item.id")
+      .getMany();
+    return rows.map((row) => toItem<Item, Row>(row));
   }
 
   async get(userId: string, id: string): Promise<Item> {
-    const row = await this.rowsOf(userId).andWhere("item.id = :id", { id }).getOne();
-    if (!row) throw notFound(this.noun);
-    return this.toItem(row);
+    const item = await this.find(this.dataSource.manager, userId, id);
+    if (!item) throw notFound(this.noun);
+    return item;
   }
 
-  /** Creates or replaces; the same request may be sent again. True if the item is new. */
-  async put(userId: string, item: Item): Promise<boolean> {
-    return this.dataSource.transaction(async (manager) => {
-      // One writer per account at a time: ON CONFLICT guards only the primary key, not the other unique
-      // index (id, user_id), and the count of items must not be overtaken.
-      await manager.query("SELECT FROM users WHERE id = $1 FOR NO KEY UPDATE", [userId]);
-      await this.options.beforeSave?.(manager, userId, item);
-      const { columns, tableName } = this.dataSource.getMetadata(this.entity);
-      const kept = new Set(["id", "user_id", "saved_at"]);
-      const overwritten = columns.map((column) => column.databaseName).filter((name) => !kept.has(name));
-      const result = await manager
-        .createQueryBuilder()
-        .insert()
-        .into(this.entity)
-        .values({ ...item, userId } as unknown as QueryDeepPartialEntity<Row>)
-        .orUpdate(overwritten, ["id"], {
-          overwriteCondition: { where: `"${tableName}"."user_id" = excluded."user_id"` },
-        })
-        .returning("(xmax = 0) AS created")
-        .updateEntity(false)
-        .execute();
-      const [saved] = result.raw as { created: boolean }[];
+  /** Creates or replaces; the same request may be sent again. */
+  async put(userId: string, item: Item, wishes: Wishes): Promise<{ created: boolean; item: Item }> {
+    return this.alone(userId, async (manager) => {
+      const { id } = item;
+      const kept = await this.find(manager, userId, id);
+      const { beforeSave } = this.options;
+      const next = beforeSave ? await beforeSave({ manager, userId, item, kept, wishes }) : item;
+      if (next === null && kept) return { created: false, item: kept };
+      const created = await this.write(manager, userId, next ?? item);
+      if (created) await this.refuseTooMany(manager, userId);
+      const saved = await this.find(manager, userId, id);
       if (!saved) throw notFound(this.noun);
-      if (saved.created) await this.refuseTooMany(manager, userId);
-      return saved.created;
+      return { created, item: saved };
     });
   }
 
   async remove(userId: string, id: string): Promise<void> {
-    const { affected } = await this.dataSource
+    await this.alone(userId, async (manager) => {
+      const { affected } = await manager
+        .createQueryBuilder()
+        .delete()
+        .from(this.entity)
+        .where("user_id = :userId AND id = :id", { userId, id })
+        .execute();
+      if (!affected) throw notFound(this.noun);
+    });
+  }
+
+  /**
+   * One writer per account at a time, who locks the account before anything else: ON CONFLICT guards only the primary
+   * key, not the other unique index (id, user_id); the count of items must not be overtaken; and whoever removes a song
+   * and whoever decides its key would lock the two rows in opposite order.
+   */
+  private alone<Result>(userId: string, work: (manager: EntityManager) => Promise<Result>): Promise<Result> {
+    return this.dataSource.transaction(async (manager) => {
+      await manager.query("SELECT FROM users WHERE id = $1 FOR NO KEY UPDATE", [userId]);
+      return work(manager);
+    });
+  }
+
+  /** True if the item is new. */
+  private async write(manager: EntityManager, userId: string, item: Item): Promise<boolean> {
+    const { columns, tableName } = this.dataSource.getMetadata(this.entity);
+    const kept = new Set(["id", "user_id", "saved_at"]);
+    const overwritten = columns
+      .filter(({ databaseName, isUpdate }) => isUpdate && !kept.has(databaseName))
+      .map(({ databaseName }) => databaseName);
+    const result = await manager
       .createQueryBuilder()
-      .delete()
-      .from(this.entity)
-      .where("user_id = :userId AND id = :id", { userId, id })
+      .insert()
+      .into(this.entity)
+      .values({ ...item, userId } as unknown as QueryDeepPartialEntity<Row>)
+      .orUpdate(overwritten, ["id"], {
+        overwriteCondition: { where: `"${tableName}"."user_id" = excluded."user_id"` },
+      })
+      .returning("(xmax = 0) AS created")
+      .updateEntity(false)
       .execute();
-    if (!affected) throw notFound(this.noun);
+    const [saved] = result.raw as { created: boolean }[];
+    if (!saved) throw notFound(this.noun);
+    return saved.created;
+  }
+
+  private async find(manager: EntityManager, userId: string, id: string): Promise<Item | null> {
+    const row = await rowsOf(manager, this.entity, userId).andWhere("item.id = :id", { id }).getOne();
+    return row && toItem<Item, Row>(row);
   }
 
   private async refuseTooMany(manager: EntityManager, userId: string): Promise<void> {
-    const count = await manager
-      .createQueryBuilder(this.entity, "item")
-      .where("item.userId = :userId", { userId })
-      .getCount();
+    const count = await rowsOf(manager, this.entity, userId).getCount();
     if (count > this.limit) {
       throw new HttpProblem(
         409,
@@ -89,12 +130,12 @@ export class OwnedCollection<Item extends { id: string }, Row extends Item & Own
       );
     }
   }
+}
 
-  private rowsOf(userId: string) {
-    return this.dataSource.createQueryBuilder(this.entity, "item").where("item.userId = :userId", { userId });
-  }
+function rowsOf<Row extends OwnedEntity>(manager: EntityManager, entity: new () => Row, userId: string) {
+  return manager.createQueryBuilder(entity, "item").where("item.userId = :userId", { userId });
+}
 
-  private toItem({ userId: _userId, savedAt: _savedAt, ...item }: Row): Item {
-    return item as unknown as Item;
-  }
+function toItem<Item, Row extends Item & OwnedEntity>({ userId: _userId, savedAt: _savedAt, ...item }: Row): Item {
+  return item as unknown as Item;
 }

@@ -5,11 +5,15 @@ import { HttpProblem } from "./httpProblem";
 const mostFields = 20;
 
 /** The one gate for everything that comes in: the value as its contract describes it, or a 422 that names what to mend. */
-export function parse<Value>(schema: z.ZodType<Value>, value: unknown): Value {
+export function parse<Value>(
+  schema: z.ZodType<Value>,
+  value: unknown,
+  refusal = "Some of this cannot be saved as it is.",
+): Value {
   const result = schema.safeParse(value, { error: sentence });
   if (result.success) return result.data;
   const fields = result.error.issues.flatMap(toFields).slice(0, mostFields);
-  throw new HttpProblem(422, "invalid", "Some of this cannot be saved as it is.", fields);
+  throw new HttpProblem(422, "invalid", refusal, fields);
 }
 
 function toFields(issue: z.core.$ZodIssue): NonNullable<Problem["fields"]> {

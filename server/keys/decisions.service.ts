@@ -7,13 +7,15 @@ import { DecisionEntity } from "./decision.entity";
 export function decisionsOf(dataSource: DataSource) {
   return new OwnedCollection<Decision, DecisionEntity>(dataSource, DecisionEntity, {
     noun: "decision",
-    beforeSave: async (manager, userId, { id, songId }) => {
+    beforeSave: async ({ manager, userId, item }) => {
+      const { id, songId } = item;
       await manager
         .createQueryBuilder()
         .delete()
         .from(DecisionEntity)
         .where("user_id = :userId AND song_id = :songId AND id <> :id", { userId, songId, id })
         .execute();
+      return item;
     },
   });
 }

@@ -1,9 +1,10 @@
 import { Column, Entity } from "typeorm";
 import type { Song } from "../../shared/contract/song";
 import { isoInstant, isoInstantOrNull, OwnedEntity } from "../database/owned.entity";
+import type { ListingColumns } from "./listingColumns";
 
 @Entity("songs")
-export class SongEntity extends OwnedEntity implements Song {
+export class SongEntity extends OwnedEntity implements Song, ListingColumns {
   @Column({ type: "text" })
   title!: string;
 
@@ -39,4 +40,23 @@ export class SongEntity extends OwnedEntity implements Song {
 
   @Column({ type: "integer" })
   revision!: number;
+
+  /** when its content last changed */
+  @Column({ type: "timestamptz", name: "changed_at", default: () => "now()", select: false, update: false })
+  changedAt!: Date;
+
+  @Column({ type: "text", name: "title_key", select: false })
+  titleKey!: string;
+
+  @Column({ type: "text", array: true, name: "tag_keys", select: false })
+  tagKeys!: string[];
+
+  @Column({ type: "text", name: "search_text", select: false })
+  searchText!: string;
+
+  @Column({ type: "text", name: "first_words", select: false })
+  firstWords!: string;
+
+  @Column({ type: "jsonb", nullable: true, select: false })
+  span!: ListingColumns["span"];
 }

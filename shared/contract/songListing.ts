@@ -31,7 +31,7 @@ export const songPageQuery = z.strictObject({
   sort: songOrder.default("title"),
   limit: z.coerce.number("Give a whole number from 1 to 200.").int().min(1).max(200).default(50),
   /** `next` of the page before; good only with the same order */
-  cursor: z.string().max(1000).exactOptional(),
+  cursor: z.string().max(2000).exactOptional(),
 });
 
 /** A part of a list. `total` counts all that were found; `next` leads on, and is null on the last page. */

@@ -1,7 +1,7 @@
 import { abcTunes } from "./abcBook";
 import { abcPartOrder } from "./abcSigns";
 import { type AbcPart, type AbcTune, readAbcTune } from "./abcTune";
-import { type AbcBarText, AbcTooLarge } from "./abcVoice";
+import { type AbcBarText, AbcTooLarge } from "./abcBars";
 import type { MelodyNote } from "./melody";
 import type { MelodySyllable, WrittenFile, WrittenVoice } from "./melodyVoice";
 import { playingOrder } from "./repeats";

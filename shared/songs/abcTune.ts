@@ -1,6 +1,7 @@
 import type { AbcTuneText } from "./abcBook";
 import { type AbcKey, readAbcClef, readAbcKey } from "./abcKey";
-import { type AbcSetting, type AbcVoice, createAbcVoice } from "./abcVoice";
+import type { AbcSetting } from "./abcBars";
+import { type AbcVoice, createAbcVoice } from "./abcVoice";
 import { type WordCursor, layWords, plainWord } from "./abcWords";
 
 /** A voice of a tune with what is known about it. */

@@ -1,37 +1,6 @@
-import type { AbcClef } from "./abcKey";
+import { type AbcBarText, type AbcNote, type AbcSetting, AbcTooLarge } from "./abcBars";
 import { readAbcBar, readAbcEnding, readAbcLength, readAbcTuplet } from "./abcSigns";
 import type { WordPlace } from "./abcWords";
-import type { MeasureSigns } from "./repeats";
-
-/** A note of ABC notation inside its bar; times in quarter notes. */
-export interface AbcNote {
-  start: number;
-  duration: number;
-  midi: number;
-  tied: boolean;
-  /** 0 for the voice itself, 1 and on for what "&" lays over it */
-  layer: number;
-}
-
-/** What stands between two bar lines. */
-export interface AbcBarText {
-  notes: AbcNote[];
-  words: (WordPlace & { start: number })[];
-  length: number;
-  signs: MeasureSigns & { section?: boolean };
-  part: string;
-}
-
-/** What fields say about the notes that follow. */
-export interface AbcSetting {
-  /** semitones by letter */
-  signature: Record<string, number>;
-  /** quarter notes of the unit length, of a bar (null in free metre) */
-  unit: number;
-  bar: number | null;
-  compound: boolean;
-  clef: Required<Omit<AbcClef, "name">>;
-}
 
 /** One voice while it is read. */
 export interface AbcVoice {
@@ -60,9 +29,6 @@ const tokens = {
   broken: /(>+|<+)/y,
   tie: /\.?-/y,
 };
-
-/** Thrown where a text asks for more than any song has. */
-export class AbcTooLarge extends Error {}
 
 const most = { notes: 100_000, bars: 50_000, quarters: 50_000, overlays: 2_000 };
 
@@ -217,7 +183,8 @@ export function createAbcVoice(setting: AbcSetting): AbcVoice {
     if (notes.length > 0) {
       place(
         notes[0]!.length * times,
-        notes.map((each) => ({ ...each, length: each.length * times })),
+        // A chord is as long as its first note (standard 2.1, section 4.17).
+        notes.map((each) => ({ ...each, length: notes[0]!.length * times })),
       );
       for (const [name, alter] of tiesInside) tiedPitches.set(name, alter);
     }

@@ -4,6 +4,7 @@ export interface WordPlace {
   /** syllables of the verses in turn; null where a verse is silent or holds the syllable before */
   verses: (WordSyllable | null)[];
 }
+/** A syllable as it stands in a w: line. */
 export interface WordSyllable {
   text: string;
   newLine: boolean;

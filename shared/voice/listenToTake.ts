@@ -16,14 +16,15 @@ import { comfortBand, probableReach } from "./vocalReach";
  * @param sampleRate in Hz, 8000 to 192000
  * @param options hold: the singer was asked to hold single notes, so that a note counts from 0.5 s instead of 0.24 s;
  *   a4: reference pitch in Hz that MIDI numbers refer to, default 440;
- *   measured: what a live tracker measured of this very take, which saves measuring it again
+ *   measured: what a live tracker measured of this very take, which saves measuring it again;
+ *   onProgress: told the share of the work that is done, 0 to 1, for every second of the take
  * @returns the report; its numbers are null unless the verdict is "heard"
  * @throws RangeError if the rate is outside 8-192 kHz or a4 is not positive
  */
-export function listenToTake(pcm: Float32Array, sampleRate: number, options: { hold?: boolean; a4?: number; measured?: MeasuredSound | null } = {}): TakeReport {
-  const { hold = false, a4 = 440, measured = null } = options;
+export function listenToTake(pcm: Float32Array, sampleRate: number, options: { hold?: boolean; a4?: number; measured?: MeasuredSound | null; onProgress?: (share: number) => void } = {}): TakeReport {
+  const { hold = false, a4 = 440, measured = null, onProgress } = options;
   if (!(a4 > 0)) throw new RangeError("a4 must be a positive frequency in Hz");
-  const { frames, room } = trackPitch(pcm, sampleRate, measured);
+  const { frames, room } = trackPitch(pcm, sampleRate, measured, onProgress);
   const toReference = 12 * Math.log2(440 / a4);
   const found = findNotes(frames, hold ? HELD_IN_HOLD_S : HELD_IN_PHRASE_S).map((n) => ({ ...n, midi: n.midi + toReference }));
   const notes = weedNotes(found);

@@ -6,6 +6,8 @@ import { createPathFinder } from "./pitchPath";
 import { measureRoom, type RoomFloor } from "./roomFloor";
 
 const OVERTONE_FROM_MIDI = 76;
+/** What measuring takes of the time; choosing among what was measured takes the rest. */
+const MEASURING_SHARE = 0.6;
 
 /** What the tracker decided for one frame of 10 ms. */
 export interface TrackFrame {
@@ -41,14 +43,26 @@ export interface MeasuredSound {
  * @param pcm mono samples in [-1, 1], shape [n]; not modified
  * @param sampleRate in Hz, 8000 to 192000
  * @param measured of this very take, where it was listened to while it was sung; changes the speed and nothing else
+ * @param onProgress told the share that is done, 0 to 1, for every second of the take
  * @throws RangeError if the rate is outside 8-192 kHz
  */
-export function trackPitch(pcm: Float32Array, sampleRate: number, measured: MeasuredSound | null = null): PitchTrack {
+export function trackPitch(
+  pcm: Float32Array,
+  sampleRate: number,
+  measured: MeasuredSound | null = null,
+  onProgress: (share: number) => void = () => undefined,
+): PitchTrack {
   const sound = measured?.sound ?? atAnalysisRate(pcm, sampleRate);
   const measure = createLagMeter();
   const measureShort = createLagMeter(SHORT_WINDOW);
   const count = Math.floor((pcm.length * 100) / sampleRate);
-  const lagFrames = Array.from({ length: count }, (_, k) => measured?.lagFrames[k] ?? measure(sound, k * HOP - WINDOW / 2));
+  const step = (k: number, from: number, share: number) => {
+    if (k % 100 === 99) onProgress(from + (share * (k + 1)) / count);
+  };
+  const lagFrames = Array.from({ length: count }, (_, k) => {
+    step(k, 0, MEASURING_SHARE);
+    return measured?.lagFrames[k] ?? measure(sound, k * HOP - WINDOW / 2);
+  });
   const room = measureRoom(lagFrames);
   const finder = createPathFinder();
   const found: CandidateFrame[] = [];
@@ -56,10 +70,14 @@ export function trackPitch(pcm: Float32Array, sampleRate: number, measured: Meas
     const frame = findCandidates(lagFrame, room, () => measureShort(sound, k * HOP - SHORT_WINDOW / 2));
     found.push(frame);
     finder.push(frame);
+    step(k, MEASURING_SHARE, 1 - MEASURING_SHARE);
   });
   const frames = finder.path().map((point, k) => ({
     ...trackFrame(found[k]!, point.candidate),
-    overtoneDb: point.candidate && point.candidate.midi > OVERTONE_FROM_MIDI ? overtone(lagFrames[k]!.r, point.candidate.hz) : null,
+    overtoneDb:
+      point.candidate && point.candidate.midi > OVERTONE_FROM_MIDI
+        ? overtone(lagFrames[k]!.r, point.candidate.hz)
+        : null,
   }));
   return { frames, room };
 }

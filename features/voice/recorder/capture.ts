@@ -49,7 +49,7 @@ export function createCapture(emit: (event: RecorderEvent) => void, live: LiveSo
     return fresh;
   };
   const receive = (message: FromTakeWorker) => {
-    if (message.kind === "judged") emit(message);
+    if (message.kind === "judged" || message.kind === "listened") emit(message);
     else if (message.kind === "broken") emit({ kind: "broken" });
     else if (microphone) {
       hear(live, message, performance.now());
@@ -111,7 +111,10 @@ export function createCapture(emit: (event: RecorderEvent) => void, live: LiveSo
       release();
       const mine = round;
       try {
-        const { pcm, sampleRate } = await readSoundFile(file);
+        const { pcm, sampleRate } = await readSoundFile(
+          file,
+          (share) => mine === round && emit({ kind: "bytes", share }),
+        );
         if (mine !== round) return;
         const sungAt = new Date(Math.min(Date.now(), file.lastModified)).toISOString();
         const take = { id: newId(), sungAt };

@@ -82,8 +82,14 @@ it("judges what a reload cut off, or shows what was already judged", () => {
 
 it("reads a recording instead, or says why not", () => {
   const reading = after([{ kind: "read", name: "evening.mp3" }]);
-  expect(reading).toEqual({ step: "reading", name: "evening.mp3" });
+  expect(reading).toEqual({ step: "reading", name: "evening.mp3", share: 0 });
+  expect(after([{ kind: "bytes", share: 0.5 }], reading)).toMatchObject({ share: 0.5 });
+  expect(after([{ kind: "bytes", share: null }], reading)).toMatchObject({ share: null });
   const decoded: RecorderEvent = { kind: "decoded", id: "take-2", sungAt: sung.sungAt, seconds: 31 };
+  expect(after([decoded, { kind: "listened", share: 0.25 }], reading)).toMatchObject({
+    step: "judging",
+    listened: 0.25,
+  });
   expect(after([decoded, judged(heard)], reading)).toMatchObject({
     step: "result",
     take: { id: "take-2", stoppedBy: "file", processed: [] },

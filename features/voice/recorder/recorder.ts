@@ -55,11 +55,12 @@ export type RecorderState =
   | { step: "asking" }
   /** the microphone is open, and the singer is counted in */
   | { step: "counting"; left: number }
-  /** a file is turned into sound */
-  | { step: "reading"; name: string }
+  /** a file is read, so many bytes of it; then it is turned into sound, and `share` is null */
+  | { step: "reading"; name: string; share: number | null }
   | ({ step: "listening"; seconds: number } & Sung)
   | ({ step: "stopping"; stoppedBy: StoppedBy; seconds: number } & Sung)
-  | ({ step: "judging"; stoppedBy: StoppedBy; seconds: number } & Sung)
+  /** `listened` is the share that the engine has been through, 0 to 1 */
+  | ({ step: "judging"; stoppedBy: StoppedBy; seconds: number; listened: number } & Sung)
   /** `judgingPart` while the worker reads a part of the take, `refusedPart` where too little was in it */
   | { step: "result"; take: HeardTake; judgingPart: boolean; refusedPart: string | null }
   | { step: "failure"; failure: Failure };
@@ -84,6 +85,8 @@ export type RecorderEvent =
   | { kind: "restored"; take: HeardTake }
   | { kind: "rejudging"; id: string; sungAt: string; seconds: number }
   | { kind: "read"; name: string }
+  | { kind: "bytes"; share: number | null }
+  | { kind: "listened"; share: number }
   | { kind: "decoded"; id: string; sungAt: string; seconds: number }
   | { kind: "unusable"; why: Refusal; file: SoundKind | null }
   | { kind: "judgePart" }
@@ -111,10 +114,11 @@ export function recorder(state: RecorderState, event: RecorderEvent): RecorderSt
     case "listening":
       return whileListening(state, event);
     case "stopping":
-      if (event.kind === "flushed") return { ...state, step: "judging" };
+      if (event.kind === "flushed") return { ...state, step: "judging", listened: 0 };
       return event.kind === "broken" ? failed({ kind: "broken", seconds: state.seconds }) : state;
     case "judging":
       if (event.kind === "judged") return afterJudging(state, event);
+      if (event.kind === "listened") return { ...state, listened: event.share };
       return event.kind === "broken" ? failed({ kind: "broken", seconds: state.seconds }) : state;
     case "result":
       return afterResult(state, event);
@@ -123,7 +127,7 @@ export function recorder(state: RecorderState, event: RecorderEvent): RecorderSt
 
 function fromRest(state: RecorderState, event: RecorderEvent): RecorderState {
   if (event.kind === "ask") return { step: "asking" };
-  if (event.kind === "read") return { step: "reading", name: event.name };
+  if (event.kind === "read") return { step: "reading", name: event.name, share: 0 };
   if (event.kind === "restored") return resultOf(event.take);
   if (event.kind !== "rejudging") return state;
   return { ...judgingOf(event), stoppedBy: "reloaded" };
@@ -146,8 +150,10 @@ function beforeListening(state: RecorderState, event: RecorderEvent): RecorderSt
   }
 }
 
-function whileReading(state: RecorderState, event: RecorderEvent): RecorderState {
+function whileReading(state: RecorderState & { step: "reading" }, event: RecorderEvent): RecorderState {
   switch (event.kind) {
+    case "bytes":
+      return { ...state, share: event.share };
     case "decoded":
       return { ...judgingOf(event), stoppedBy: "file" };
     case "unusable":
@@ -165,7 +171,7 @@ function afterResult(state: RecorderState & { step: "result" }, event: RecorderE
     case "ask":
       return { step: "asking" };
     case "read":
-      return { step: "reading", name: event.name };
+      return { step: "reading", name: event.name, share: 0 };
     case "felt":
       return { ...state, take: { ...state.take, warmedUp: event.warmedUp, effort: event.effort } };
     case "judgePart":
@@ -222,7 +228,7 @@ function afterJudging(
 }
 
 function judgingOf({ id, sungAt, seconds }: { id: string; sungAt: string; seconds: number }) {
-  return { step: "judging", seconds, id, sungAt, processed: [] as Processing[] } as const;
+  return { step: "judging", seconds, listened: 0, id, sungAt, processed: [] as Processing[] } as const;
 }
 
 function failed(failure: Partial<Failure> & { kind: FailureKind }): RecorderState {

@@ -1,3 +1,5 @@
+import { restoreFlatTops } from "./flatTops";
+
 /** Kinds of sound file that are taken. */
 export type SoundKind = "wav" | "mp3" | "m4a" | "ogg" | "webm" | "flac";
 /** Why a file cannot be used. */
@@ -6,7 +8,7 @@ export type Refusal = "not-a-sound" | "unreadable-file" | "too-large" | "too-lon
 const largestFileBytes = 20 * 1024 * 1024;
 const longestFileS = 600;
 
-/** At the full rate cut-off peaks stay flat and can be told; a long recording would then take a phone's whole memory. */
+/** A long recording at the full rate would take a phone's whole memory. */
 const fullRate = 44_100;
 const sparingRate = 16_000;
 const fullRateUpToS = 120;
@@ -55,9 +57,13 @@ function isMpegFrame([a = 0, b = 0, c = 0]: Uint8Array): boolean {
 /**
  * Turns a sound file into mono sound, on this device.
  *
+ * @param onBytes told the share of the file that was read, 0 to 1, and null once it is being turned into sound
  * @throws FileRefused with the reason
  */
-export async function readSoundFile(file: File): Promise<FileSound> {
+export async function readSoundFile(
+  file: File,
+  onBytes: (share: number | null) => void = () => undefined,
+): Promise<FileSound> {
   if (file.size > largestFileBytes) throw new FileRefused("too-large", null);
   if (file.size === 0) throw new FileRefused("empty-file", null);
   const kind = soundKind(new Uint8Array(await bytesOf(file.slice(0, 64), null)));
@@ -65,22 +71,35 @@ export async function readSoundFile(file: File): Promise<FileSound> {
   const said = await saidLength(file);
   if (said !== null && said > longestFileS) throw new FileRefused("too-long", kind);
   const full = said === null ? file.size <= fullRateUpToBytes : said <= fullRateUpToS;
-  const sound = await decode(file, kind, full ? fullRate : sparingRate);
+  const bytes = await bytesOf(file, kind, onBytes);
+  onBytes(null);
+  const sound = await decode(bytes, kind, full ? fullRate : sparingRate);
   if (sound.duration > longestFileS) throw new FileRefused("too-long", kind);
   if (sound.length === 0) throw new FileRefused("empty-file", kind);
-  return { kind, pcm: mono(sound), sampleRate: sound.sampleRate };
+  return { kind, pcm: restoreFlatTops(mono(sound)), sampleRate: sound.sampleRate };
 }
 
-async function bytesOf(blob: Blob, kind: SoundKind | null): Promise<ArrayBuffer> {
+async function bytesOf(
+  blob: Blob,
+  kind: SoundKind | null,
+  onBytes: (share: number) => void = () => undefined,
+): Promise<ArrayBuffer> {
   try {
-    return await blob.arrayBuffer();
+    const bytes = new Uint8Array(blob.size);
+    const reader = blob.stream().getReader();
+    let at = 0;
+    for (let part = await reader.read(); !part.done; part = await reader.read()) {
+      bytes.set(part.value, at);
+      at += part.value.length;
+      onBytes(at / blob.size);
+    }
+    return bytes.buffer;
   } catch {
     throw new FileRefused("unreadable-file", kind);
   }
 }
 
-async function decode(file: File, kind: SoundKind, rate: number): Promise<AudioBuffer> {
-  const bytes = await bytesOf(file, kind);
+async function decode(bytes: ArrayBuffer, kind: SoundKind, rate: number): Promise<AudioBuffer> {
   try {
     return await new OfflineAudioContext(1, 1, rate).decodeAudioData(bytes);
   } catch {

@@ -9,7 +9,12 @@ const tellEveryS = 0.02;
 export interface TakeTools {
   createTracker(sampleRate: number): LiveTracker;
   /** `measured` while the take was sung; null for sound that came as a whole */
-  judge(pcm: Float32Array, sampleRate: number, measured: ReturnType<LiveTracker["measured"]>): TakeReport;
+  judge(
+    pcm: Float32Array,
+    sampleRate: number,
+    measured: ReturnType<LiveTracker["measured"]>,
+    onProgress: (share: number) => void,
+  ): TakeReport;
   /** stores one second of sound on the device, against a reload */
   keepPart(id: string, index: number, pcm: Float32Array<ArrayBuffer>): void;
   /** runs the engine once on nothing that matters, so that its first real work is not its slowest */
@@ -45,7 +50,9 @@ export function createTakeListener(tools: TakeTools): (message: ToTakeWorker) =>
     measured: ReturnType<LiveTracker["measured"]> = null,
   ) => {
     try {
-      const report = tools.judge(pcm, sampleRate, measured);
+      const report = tools.judge(pcm, sampleRate, measured, (share) => {
+        if (measured === null) tools.post({ kind: "listened", share });
+      });
       tools.post({ kind: "judged", report, pcm, sampleRate, part }, [pcm.buffer]);
     } catch (fault) {
       tools.post({ kind: "broken", reason: String(fault) });

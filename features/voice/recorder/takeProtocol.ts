@@ -32,6 +32,8 @@ export type TakeSound = { kind: "block"; pcm: Float32Array<ArrayBuffer> } | { ki
 export type FromTakeWorker =
   /** About every 10 ms while listening. `ahead` is what was measured and not yet decided, `peak` is the largest absolute sample since the last message, `levelDb` its RMS in dBFS. */
   | { kind: "heard"; frames: LiveFrame[]; ahead: LiveFrame[]; seconds: number; levelDb: number; peak: number }
+  /** So much of sound that came as a whole was listened to, 0 to 1. */
+  | { kind: "listened"; share: number }
   | { kind: "judged"; report: TakeReport; pcm: Float32Array<ArrayBuffer>; sampleRate: number; part: TakePart | null }
   /** The engine stopped with a fault. */
   | { kind: "broken"; reason: string };

@@ -13,7 +13,7 @@ const scope = globalThis as unknown as WorkerScope;
 
 const tell = createTakeListener({
   createTracker,
-  judge: (pcm, sampleRate, measured) => listenToTake(pcm, sampleRate, { measured }),
+  judge: (pcm, sampleRate, measured, onProgress) => listenToTake(pcm, sampleRate, { measured, onProgress }),
   // Full or forbidden storage only costs the safety against a reload, never the take.
   keepPart: (id, index, pcm) => void appendUnkept(id, index, pcm).catch(() => undefined),
   warmUp: () => warmUp(),

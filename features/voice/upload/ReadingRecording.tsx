@@ -4,7 +4,7 @@ import { Icon } from "@/features/ui/Icon";
 import { LiveText } from "@/features/ui/LiveText";
 import { Screen } from "@/features/ui/Screen";
 import { Text } from "@/features/ui/Text";
-import { colors } from "@/features/ui/theme";
+import { colors, mixtures } from "@/features/ui/theme";
 import type { RecorderState } from "../recorder/recorder";
 
 export interface ReadingRecordingProps {
@@ -13,9 +13,12 @@ export interface ReadingRecordingProps {
   onCancel: () => void;
 }
 
-/** While a recording is read: which of the two steps it is at, and the way out. */
+/** While a recording is read: how far each of the three steps is, and the way out. */
 export function ReadingRecording({ name, state, onCancel }: ReadingRecordingProps) {
+  const bytes = state.step === "reading" ? state.share : null;
   const listening = state.step === "judging";
+  const heard = listening ? state.listened : 0;
+  const all = listening ? lengthWords(state.seconds) : "";
   return (
     <Screen
       title="Reading the recording"
@@ -24,25 +27,41 @@ export function ReadingRecording({ name, state, onCancel }: ReadingRecordingProp
       footer={<Button kind="secondary" icon="close" label="Cancel" onPress={onCancel} testID="upload-cancel" />}
     >
       <View aria-busy testID="upload-progress" style={{ gap: 16, paddingTop: 20, maxWidth: 560 }}>
-        <Step words="Turning the file into sound" done={listening} now={!listening} />
+        <Step words="Reading the file" now={bytes !== null} done={bytes === null} share={bytes} />
+        <Step words="Turning it into sound" now={!listening && bytes === null} done={listening} />
         <Step
-          words={listening ? `Listening to ${lengthWords(state.seconds)} of sound` : "Listening to it"}
-          done={false}
+          words={listening ? `Listening: ${lengthWords(heard * state.seconds)} of ${all}` : "Listening"}
           now={listening}
+          done={false}
+          share={listening ? heard : null}
         />
-        <LiveText variant="small" tone="soft">
+        <Text variant="small" tone="soft">
           {listening && state.seconds > 60
             ? "A long recording takes a little while. The page can be used meanwhile, and nothing is sent anywhere."
             : "Nothing is sent anywhere."}
-        </LiveText>
+        </Text>
+        <LiveText hidden>{listening ? `Listening to ${all} of sound: ${quarterWords(heard)}` : ""}</LiveText>
       </View>
     </Screen>
   );
 }
 
-function Step({ words, done, now }: { words: string; done: boolean; now: boolean }) {
+/** Said four times, not a hundred. */
+function quarterWords(share: number): string {
+  return `${25 * Math.floor(4 * share)} % done.`;
+}
+
+interface StepProps {
+  words: string;
+  done: boolean;
+  now: boolean;
+  /** how far it is, 0 to 1; null where that cannot be told */
+  share?: number | null;
+}
+
+function Step({ words, done, now, share = null }: StepProps) {
   return (
-    <View style={{ flexDirection: "row", gap: 12, alignItems: "center" }}>
+    <View style={{ flexDirection: "row", gap: 12, alignItems: "flex-start" }}>
       <View
         style={{
           width: 28,
@@ -57,15 +76,35 @@ function Step({ words, done, now }: { words: string; done: boolean; now: boolean
         {done && <Icon name="check" size={18} color={colors.plum} />}
         {now && <View style={{ width: 10, height: 10, borderRadius: 5, backgroundColor: colors.plum }} />}
       </View>
-      <Text variant={now ? "strong" : "body"} tone={done || now ? "ink" : "soft"}>
-        {done ? `${words}: done` : words}
-      </Text>
+      <View style={{ flexGrow: 1, flexShrink: 1, gap: 8, paddingTop: 2 }}>
+        <Text variant={now ? "strong" : "body"} tone={done || now ? "ink" : "soft"}>
+          {done ? `${words}: done` : words}
+        </Text>
+        {now && share !== null && (
+          <View
+            role="progressbar"
+            aria-label={words}
+            aria-valuemin={0}
+            aria-valuemax={100}
+            aria-valuenow={Math.round(100 * share)}
+            style={{ height: 8, borderRadius: 4, borderWidth: 1, borderColor: mixtures.rungC }}
+          >
+            <View
+              style={{
+                ...{ position: "absolute", top: -1, bottom: -1, left: -1, borderRadius: 4 },
+                width: `${100 * share}%`,
+                backgroundColor: colors.plum,
+              }}
+            />
+          </View>
+        )}
+      </View>
     </View>
   );
 }
 
 function lengthWords(seconds: number): string {
-  const whole = Math.max(1, Math.round(seconds));
+  const whole = Math.round(seconds);
   if (whole < 60) return `${whole} s`;
   return `${Math.floor(whole / 60)} min ${whole % 60} s`;
 }

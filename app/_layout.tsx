@@ -18,6 +18,7 @@ const parts: LazyPart[] = [
   () => import("@/shared/ways/findWays"),
   () => import("./songs/[id]/edit"),
   () => import("./songs/new"),
+  () => import("./songs/import"),
   () => import("./voice/index"),
   () => import("./voice/sing"),
   () => import("./voice/guided"),

@@ -1,59 +1,52 @@
 import { useQuery } from "@tanstack/react-query";
-import { useLocalSearchParams } from "expo-router";
+import { useLocalSearchParams, useRouter } from "expo-router";
+import { useCallback, useMemo } from "react";
 import { EnteredNotice } from "@/features/account/EnteredNotice";
 import { decidedElsewhere, decidedOn } from "@/features/keys/decide";
 import { decisionFor, decisionQueries } from "@/features/keys/decisionQueries";
-import { ShelfStrip } from "@/features/keys/ShelfStrip";
-import { keyInHand, keyRowsOf } from "@/features/keys/songKeys";
-import { SignedOutNotice } from "@/features/songs/SignedOut";
-import { SongShelf, type ShelfKey } from "@/features/songs/shelf/SongShelf";
+import { wholeVoice } from "@/features/keys/keyRows";
+import { keyInHand } from "@/features/keys/songKeys";
+import { ShelfScreen } from "@/features/songs/shelf/ShelfScreen";
+import type { ShelfKey } from "@/features/songs/shelf/shelfRow";
+import { readView, viewParams, type ShelfView } from "@/features/songs/shelf/shelfView";
 import { songMoveWords } from "@/features/songs/songFacts";
-import { songQueries } from "@/features/songs/songQueries";
-import { LinkButton } from "@/features/ui/LinkButton";
-import { QueryState } from "@/features/ui/QueryState";
-import { Screen } from "@/features/ui/Screen";
-import { Skeleton } from "@/features/ui/Skeleton";
 import { useSingingVoice } from "@/features/voice/useSingingVoice";
-import type { Song } from "@/shared/contract/song";
+import type { SongListing } from "@/shared/contract/songListing";
 
 export default function SongsRoute() {
-  const { entered } = useLocalSearchParams<{ entered?: string }>();
-  const songs = useQuery(songQueries.all());
-  const decisions = useQuery(decisionQueries.all());
-  const { forKeys: singing, voice, voices } = useSingingVoice();
-  const myKey = (song: Song): ShelfKey | null => {
-    const decision = decisionFor(decisions.data ?? [], song.id);
-    if (!decision) return null;
-    const inHand = keyInHand(song, keyRowsOf(song, singing), decision);
-    if (inHand?.because !== "decided") return null;
-    if (decidedElsewhere(decision, voice?.id ?? null)) {
+  const router = useRouter();
+  const params = useLocalSearchParams<{ entered?: string }>();
+  const view = readView(params);
+  const decisions = useQuery(decisionQueries.all()).data;
+  const { forKeys, voice, voices } = useSingingVoice();
+  const singing = useMemo(() => forKeys && wholeVoice(forKeys), [forKeys]);
+  const bySong = useMemo(() => {
+    const latest = new Map<string, NonNullable<typeof decisions>>();
+    for (const each of decisions ?? []) latest.set(each.songId, [...(latest.get(each.songId) ?? []), each]);
+    return latest;
+  }, [decisions]);
+  const mineOf = useCallback(
+    (song: SongListing): ShelfKey | null => {
+      const decision = decisionFor(bySong.get(song.id) ?? [], song.id);
+      // A listing has no chart and no notes; key and home note are all that is asked for here.
+      const tune = song.span && { kind: "span" as const, ...song.span };
+      const inHand = decision && keyInHand({ ...song, chart: "", tune }, null, decision);
+      if (!inHand || inHand.because !== "decided") return null;
+      const { key, shift } = inHand;
+      const elsewhere = decidedElsewhere(decision, voice?.id ?? null);
       const other = voices.find(({ id }) => id === decision.voiceId)?.name ?? "another voice";
-      return { key: inHand.key, words: `Decided for ${other} since ${decidedOn(decision)}`, strip: null };
-    }
-    return {
-      key: inHand.key,
-      words: `My key since ${decidedOn(decision)}, ${songMoveWords(song, inHand.shift)}. ${decision.reason.replace(/\.$/, "")}`,
-      strip: singing && inHand.row ? <ShelfStrip row={inHand.row} singing={singing} /> : null,
-    };
-  };
+      const moved = songMoveWords({ chart: song.writtenKey ? "-" : "" }, shift);
+      const words = elsewhere
+        ? `Decided for ${other} since ${decidedOn(decision)}`
+        : `My key since ${decidedOn(decision)}, ${moved}. ${decision.reason.replace(/\.$/, "")}`;
+      return { key, shift, elsewhere, words };
+    },
+    [bySong, voice, voices],
+  );
+  const show = (change: Partial<ShelfView>) => router.setParams(viewParams({ ...view, ...change }));
   return (
-    <Screen
-      title="Songs"
-      footer={
-        songs.data?.length === 0 ? undefined : (
-          <LinkButton href="/songs/new" label="Add a song" icon="plus" testID="add-song" />
-        )
-      }
-    >
-      <EnteredNotice entered={entered} />
-      <SignedOutNotice />
-      <QueryState
-        query={songs}
-        title="Your songs could not be opened"
-        skeleton={<Skeleton bars={[{ height: 52 }, { height: 72 }, { height: 72 }]} words="Opening your songs" />}
-      >
-        {(all) => <SongShelf songs={all} myKey={myKey} />}
-      </QueryState>
-    </Screen>
+    <ShelfScreen view={view} onView={show} voice={singing} mineOf={mineOf}>
+      <EnteredNotice entered={params.entered} />
+    </ShelfScreen>
   );
 }

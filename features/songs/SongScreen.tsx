@@ -38,6 +38,8 @@ export interface SongScreenProps {
   ways: ReactNode;
   /** keeps the chosen way; in the head of the wide page */
   use: ReactNode;
+  /** tags, and what can be done with the song besides editing and deleting */
+  shelfTools?: ReactNode;
   onRemove: () => void;
   removal: { isPending: boolean; error: Error | null };
 }
@@ -45,7 +47,18 @@ export interface SongScreenProps {
 /** From this width on chart, keys and ways stand in three columns. */
 const threeColumnsFrom = 1400;
 
-export function SongScreen({ song, target, card, decided, keys, ways, use, onRemove, removal }: SongScreenProps) {
+export function SongScreen({
+  song,
+  target,
+  card,
+  decided,
+  keys,
+  ways,
+  use,
+  shelfTools,
+  onRemove,
+  removal,
+}: SongScreenProps) {
   const layout = useLayout();
   const { width } = useWindowDimensions();
   const [turned, setAsWritten] = useState<boolean | null>(null);
@@ -63,26 +76,28 @@ export function SongScreen({ song, target, card, decided, keys, ways, use, onRem
     params: target ? { ...params, key: target.key.tonic, shift: String(target.shift) } : params,
   };
   const tools = (
-    <View
-      style={{
-        flexDirection: "row",
-        flexWrap: "wrap",
-        columnGap: 8,
-        marginTop: 24,
-        marginLeft: -8,
-        alignItems: "flex-start",
-      }}
-    >
-      {!wide && (
-        <LinkButton
-          kind="text"
-          small
-          icon="edit"
-          label="Edit the song"
-          href={{ pathname: "/songs/[id]/edit", params }}
-        />
-      )}
-      <RemoveSong title={song.title} onRemove={onRemove} busy={removal.isPending} error={removal.error} />
+    <View style={{ marginTop: 24 }}>
+      {shelfTools}
+      <View
+        style={{
+          flexDirection: "row",
+          flexWrap: "wrap",
+          columnGap: 8,
+          marginLeft: -8,
+          alignItems: "flex-start",
+        }}
+      >
+        {!wide && (
+          <LinkButton
+            kind="text"
+            small
+            icon="edit"
+            label="Edit the song"
+            href={{ pathname: "/songs/[id]/edit", params }}
+          />
+        )}
+        <RemoveSong title={song.title} onRemove={onRemove} busy={removal.isPending} error={removal.error} />
+      </View>
     </View>
   );
   const screen = { title: song.title, crumb: { label: "Songs", href: "/songs" as const }, wide: true };

@@ -1,5 +1,5 @@
 import type { Song } from "@/shared/contract/song";
-import { beatWords, hasChords, headWords, songFacts, songMoveWords, songsNamed } from "./songFacts";
+import { beatWords, hasChords, headWords, songMoveWords } from "./songFacts";
 
 const song = (title: string, chart: string, change: Partial<Song> = {}): Song => ({
   id: title,
@@ -19,27 +19,9 @@ const song = (title: string, chart: string, change: Partial<Song> = {}): Song =>
 });
 const shelf = [song("Slack Water", "Low tide"), song("Étoile", "the water is wide"), song("Gulls", "over the bar")];
 
-test.each([
-  ["water", ["Slack Water", "Étoile"]],
-  ["etoile", ["Étoile"]],
-  ["  BAR  the ", ["Gulls"]],
-  ["", ["Slack Water", "Étoile", "Gulls"]],
-  ["anchor", []],
-])("searching %j finds titles first, then words", (search, titles) => {
-  expect(songsNamed(shelf, search).map((each) => each.title)).toEqual(titles);
-});
-
-test("a song's facts", () => {
-  expect(songFacts(shelf[0]!)).toEqual({ sign: "B♭m", line: "Written in B♭m, no melody yet." });
-  expect(songFacts(song("x", "", { writtenKey: null, demo: "ferry" })).line).toBe(
-    "No key yet, a song to try Larkspan with, no melody yet.",
-  );
-});
-
 test("a tune without a chart has its home note, and no chart to lie under", () => {
   const tune = { kind: "span", lowMidi: 57, highMidi: 71, home: "Bb" } as const;
   const sung = song("x", "", { writtenKey: null, tune, beatsPerBar: null, tempo: null });
-  expect(songFacts(sung)).toEqual({ sign: "B♭", line: "Home note B♭." });
   expect(headWords(sung, null)).toBe("Home note B♭");
   expect(songMoveWords(sung, -14)).toBe("an octave and a whole tone under the tune as you gave it");
   expect(songMoveWords(sung, 0)).toBe("as you gave the tune");

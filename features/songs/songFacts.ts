@@ -4,24 +4,6 @@ import { distanceWords, moveWords } from "@/shared/music/moveWords";
 import { glyphs } from "@/shared/music/pitch";
 import { chartChords, parseChart } from "@/shared/songs/chart";
 
-/** What a list says of a song besides its title. */
-export interface SongFacts {
-  /** written key or home note, short; null where neither is known */
-  sign: string | null;
-  line: string;
-}
-
-export function songFacts(song: Song): SongFacts {
-  const sign = song.writtenKey ? glyphs(keySign(song.writtenKey)) : song.tune && glyphs(song.tune.home);
-  const key = song.writtenKey ? `Written in ${sign}` : homeWords(song);
-  const parts = [
-    key,
-    song.demo === null ? null : "a song to try Larkspan with",
-    song.tune === null ? "no melody yet" : null,
-  ];
-  return { sign, line: `${parts.filter((part) => part !== null).join(", ")}.` };
-}
-
 function homeWords({ tune }: Pick<Song, "tune">): string {
   return tune ? `Home note ${glyphs(tune.home)}` : "No key yet";
 }
@@ -60,18 +42,4 @@ export function headWords(song: Song, mine: string | null): string {
   const tempo = song.tempo === null ? null : `${song.tempo} a minute`;
   const beat = [beats, tempo].filter((part) => part !== null).join(", ");
   return beat === "" ? key : `${key} · ${beat}`;
-}
-
-/** Songs whose title or words hold every word searched for; titles first. */
-export function songsNamed(songs: readonly Song[], search: string): Song[] {
-  const words = plain(search)
-    .split(/\s+/)
-    .filter((word) => word !== "");
-  const holds = (text: string) => words.every((word) => plain(text).includes(word));
-  const titled = songs.filter((song) => holds(song.title));
-  return [...titled, ...songs.filter((song) => !titled.includes(song) && holds(`${song.title}\n${song.chart}`))];
-}
-
-function plain(text: string): string {
-  return text.normalize("NFD").replace(/\p{M}/gu, "").toLowerCase();
 }

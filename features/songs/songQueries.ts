@@ -1,8 +1,18 @@
-import { queryOptions, useMutation, useQueryClient, type QueryClient } from "@tanstack/react-query";
+import {
+  infiniteQueryOptions,
+  keepPreviousData,
+  queryOptions,
+  useMutation,
+  useQueryClient,
+  type InfiniteData,
+  type QueryClient,
+} from "@tanstack/react-query";
 import { ApiError } from "@/features/api/apiError";
 import { queryClient } from "@/features/api/queryClient";
 import { shelf } from "@/features/api/shelf";
+import { songPages, type SongQuestion } from "@/features/api/songPages";
 import type { Song } from "@/shared/contract/song";
+import type { SongPage } from "@/shared/contract/songListing";
 import { seedDemoSongs } from "./shelf/demoShelf";
 
 export const songQueries = {
@@ -29,10 +39,32 @@ export const songQueries = {
       },
       placeholderData: () => onShelf(queryClient, id),
     }),
+  /** The shelf page by page, without charts and notes; what was shown before stays while another view is fetched. */
+  pages: (question: Omit<SongQuestion, "cursor">) =>
+    infiniteQueryOptions({
+      queryKey: ["song-pages", question],
+      queryFn: async ({ pageParam }): Promise<SongPage> => {
+        await seedDemoSongs();
+        return songPages.get({ ...question, cursor: pageParam });
+      },
+      initialPageParam: null as string | null,
+      getNextPageParam: (page) => page.next,
+      placeholderData: keepPreviousData,
+    }),
+  tags: () => queryOptions({ queryKey: ["song-tags"], queryFn: () => songPages.tags() }),
 };
 
 function onShelf(client: QueryClient, id: string): Song | undefined {
   return client.getQueryData<Song[]>(["songs"])?.find((song) => song.id === id);
+}
+
+/** Every list of songs is asked for anew; what is on screen stays until the answer is here. */
+export async function refreshShelf(client: QueryClient): Promise<void> {
+  await Promise.all([
+    client.invalidateQueries({ queryKey: ["songs"], exact: true }),
+    client.invalidateQueries({ queryKey: ["song-pages"] }),
+    client.invalidateQueries({ queryKey: ["song-tags"] }),
+  ]);
 }
 
 /** Keeps a song. A key that was decided stays with it. */
@@ -42,7 +74,31 @@ export function useSaveSong() {
     mutationFn: (song: Song) => shelf.put("songs", song),
     onSuccess: async (song) => {
       client.setQueryData(songQueries.detail(song.id).queryKey, song);
-      await client.invalidateQueries({ queryKey: ["songs"], exact: true });
+      await refreshShelf(client);
+    },
+  });
+}
+
+/** A change of something that stands beside the chart: tags, when it was played, whether it is put aside. */
+export type SongChange = Partial<Pick<Song, "tags" | "playedAt" | "archivedAt">>;
+
+/** Changes a song as it is kept now; where somebody changed it at the same moment, theirs stays and this comes on top. */
+export function useChangeSong() {
+  const client = useQueryClient();
+  return useMutation({
+    mutationFn: async ({ id, change }: { id: string; change: SongChange }) => {
+      const put = async () => shelf.put("songs", { ...(await shelf.get("songs", id)), ...change });
+      try {
+        return await put();
+      } catch (error) {
+        if (error instanceof ApiError && error.code === "changed-elsewhere") return put();
+        throw error;
+      }
+    },
+    onSuccess: async (song) => {
+      client.setQueryData(songQueries.detail(song.id).queryKey, song);
+      showChanged(client, song);
+      await refreshShelf(client);
     },
   });
 }
@@ -54,10 +110,33 @@ export function useRemoveSong() {
     mutationFn: (id: string) => shelf.remove("songs", id),
     onSuccess: async (_, id) => {
       client.setQueryData<Song[]>(songQueries.all().queryKey, (songs) => songs?.filter((song) => song.id !== id));
-      await client.invalidateQueries({ queryKey: ["songs"], exact: true });
+      eachPage(client, (items) => items.filter((item) => item.id !== id));
+      await refreshShelf(client);
       await client.invalidateQueries({ queryKey: ["decisions"] });
     },
   });
+}
+
+/** The lists on screen say at once what was changed. */
+function showChanged(client: QueryClient, { id, tags, playedAt, archivedAt, revision }: Song): void {
+  eachPage(client, (items) =>
+    items.flatMap((item) => {
+      if (item.id !== id) return [item];
+      const moved = (item.archivedAt === null) !== (archivedAt === null);
+      return moved ? [] : [{ ...item, tags, playedAt, archivedAt, revision }];
+    }),
+  );
+}
+
+function eachPage(client: QueryClient, change: (items: SongPage["items"]) => SongPage["items"]): void {
+  client.setQueriesData<InfiniteData<SongPage, string | null>>(
+    { queryKey: ["song-pages"] },
+    (data) =>
+      data && {
+        ...data,
+        pages: data.pages.map((page) => ({ ...page, items: change(page.items) })),
+      },
+  );
 }
 
 function byTitle(songs: Song[]): Song[] {

@@ -8,6 +8,7 @@ export const clientRoutes = [
   "/voice/guided",
   "/songs",
   "/songs/new",
+  "/songs/import",
   "/songs/:id",
   "/songs/:id/edit",
   "/songs/:id/keys",

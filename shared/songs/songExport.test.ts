@@ -20,7 +20,9 @@ test("so does any song, whatever its chart holds", () => {
     fc.property(
       fc.record({
         title: fc.string({ minLength: 1, maxLength: 60, unit: "grapheme" }).filter((text) => text.trim() !== ""),
-        chart: fc.array(fc.constantFrom("", "D  A", "Key: D", "low water", "  Em", "Title: x", "Chorus")).map((lines) => lines.join("\n")),
+        chart: fc
+          .array(fc.constantFrom("", "D  A", "Key: D", "low water", "  Em", "Title: x", "Chorus"))
+          .map((lines) => lines.join("\n")),
         writtenKey: fc.constantFrom(null, ...keys),
         beatsPerBar: fc.option(fc.integer({ min: 1, max: 16 })),
         tempo: fc.option(fc.integer({ min: 20, max: 400 })),

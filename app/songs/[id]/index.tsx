@@ -8,6 +8,7 @@ import { KeyPane } from "@/features/keys/KeyPane";
 import { MyKeyCard } from "@/features/keys/MyKeyCard";
 import { keyInView, useSongKeys } from "@/features/keys/useSongKeys";
 import { SongScreen } from "@/features/songs/SongScreen";
+import { SongTools } from "@/features/songs/shelf/actions/SongTools";
 import { SongState } from "@/features/songs/SongState";
 import { songQueries, useRemoveSong } from "@/features/songs/songQueries";
 import { useLayout } from "@/features/ui/useLayout";
@@ -71,6 +72,7 @@ function SongPage({ song }: { song: Song }) {
             </WayColumn>
           }
           use={use}
+          shelfTools={<SongTools song={song} />}
           onRemove={() => remove.mutate(song.id, { onSuccess: () => router.replace("/songs") })}
           removal={remove}
         />

@@ -74,7 +74,8 @@ async function move(manager: EntityManager, person: DemoPerson, passwordHash: st
     SongEntity,
     songs.map((song) => ({ ...song, ...listingColumns(song), userId })),
   );
-  const decisions = songs.flatMap((song) => decide(song, voice, takes, instrument) ?? []);
+  // Keys are decided for what the class is singing now; the rest of the shelf waits for its first visit.
+  const decisions = songs.slice(0, 2).flatMap((song) => decide(song, voice, takes, instrument) ?? []);
   await manager.insert(
     DecisionEntity,
     decisions.map((decision) => ({ ...decision, userId })),

@@ -19,7 +19,7 @@ export const tagKey = (tag: string) => tag.toLowerCase();
 
 export function listingColumns({ title, chart, tune, tags }: KeptColumns): ListingColumns {
   return {
-    // An index takes no long keys, and some signs unfold into many letters.
+    // Cursors carry it, and some signs unfold into many letters.
     titleKey: foldText(title).slice(0, 200),
     tagKeys: tags.map(tagKey),
     searchText: searchText({ title, tags, chart }),

@@ -12,7 +12,8 @@ const orders: Record<SongOrder, { key: string; type: string; way: "ASC" | "DESC"
   saved: { key: "created_at", type: "timestamptz", way: "DESC" },
 };
 
-interface Row {
+interface Shown {
+  total: number;
   id: string;
   title: string;
   written_key: SongListing["writtenKey"];
@@ -28,8 +29,9 @@ interface Row {
   first_words: string;
   place: string;
 }
+type Row = Shown | { total: number; id: null };
 
-const columns = `id, title, written_key, beats_per_bar, tempo, demo, tags, archived_at, played_at, created_at, revision,
+const columns = `songs.id, title, written_key, beats_per_bar, tempo, demo, tags, archived_at, played_at, created_at, revision,
   span, first_words`;
 
 /** A person's songs as lists show them. */
@@ -42,25 +44,28 @@ export class SongPagesService {
     const values: unknown[] = [userId];
     const bind = (value: unknown) => `$${values.push(value)}`;
     const found = conditions(question, bind).join(" AND ");
-    const counted: { total: number }[] = await this.dataSource.query(
-      `SELECT count(*)::int AS total FROM songs WHERE ${found}`,
-      values,
-    );
     const after = cursor === undefined ? null : readCursor(cursor, sort);
     const beyond = after
-      ? `AND (${key}, id) ${way === "ASC" ? ">" : "<"} (${bind(after.key)}::${type}, ${bind(after.id)}::uuid)`
+      ? `WHERE (key, id) ${way === "ASC" ? ">" : "<"} (${bind(after.key)}::${type}, ${bind(after.id)}::uuid)`
       : "";
+    const order = `ORDER BY key ${way}, id ${way}`;
+    // Looks through the songs once, for their number and for the page; the number is there on an empty page as well.
     const rows: Row[] = await this.dataSource.query(
-      `SELECT ${columns}, (${key})::text AS place FROM songs WHERE ${found} ${beyond}
-       ORDER BY ${key} ${way}, id ${way} LIMIT ${bind(limit + 1)}`,
+      `WITH found AS MATERIALIZED (SELECT id, ${key} AS key FROM songs WHERE ${found}),
+       page AS (SELECT id, key FROM found ${beyond} ${order} LIMIT ${bind(limit + 1)}),
+       shown AS (SELECT ${columns}, key, key::text AS place FROM page JOIN songs USING (id))
+       SELECT (SELECT count(*)::int FROM found) AS total, shown.*
+       FROM (SELECT) AS always LEFT JOIN shown ON true ${order}`,
       values,
     );
-    const shown = rows.slice(0, limit);
+    const total = rows[0]?.total ?? 0;
+    const songs = rows.filter((row): row is Shown => row.id !== null);
+    const shown = songs.slice(0, limit);
     const last = shown.at(-1);
     return {
       items: shown.map(toListing),
-      next: last && rows.length > limit ? writeCursor({ sort, key: last.place, id: last.id }) : null,
-      total: counted[0]?.total ?? 0,
+      next: last && songs.length > limit ? writeCursor({ sort, key: last.place, id: last.id }) : null,
+      total,
     };
   }
 
@@ -86,7 +91,7 @@ function conditions({ q, tag, archived }: z.output<typeof songPageQuery>, bind: 
   ];
 }
 
-function toListing(row: Row): SongListing {
+function toListing(row: Shown): SongListing {
   return {
     id: row.id,
     title: row.title,

@@ -29,17 +29,15 @@ export default function SongRoute() {
 }
 
 function SongPage({ song }: { song: Song }) {
-  const router = useRouter();
-  const remove = useRemoveSong();
+  const [router, remove] = [useRouter(), useRemoveSong()];
   const singer = useSingingVoice();
   const [wishes] = useWishes();
-  const wide = useLayout() === "wide";
   const keys = useSongKeys(song, singer);
   const { instrument, settle } = useInstrument(song.id, keys.decision?.instrument ?? null);
   const [looked, setLooked] = useState<number | null>(null);
   const { row, key, shift, decision } = keyInView(keys, looked);
+  const wide = useLayout() === "wide";
   const search = useQuery(wayQueries.into(wide && keys.written ? { ...keys.written, instrument, wishes } : null, key));
-  const decided = keys.decision && <DecidedLine keys={keys} />;
   return (
     <WayPane
       songId={song.id}
@@ -58,7 +56,7 @@ function SongPage({ song }: { song: Song }) {
           song={song}
           target={key && { key, shift, decided: decision !== null }}
           card={keys.inHand && <MyKeyCard songId={song.id} inHand={keys.inHand} voice={keys.voice} />}
-          decided={decided}
+          decided={keys.decision && <DecidedLine keys={keys} />}
           keys={<KeyPane song={song} keys={keys} singer={singer.voice} selected={row} onSelect={setLooked} />}
           ways={
             <WayColumn

@@ -1,48 +1,81 @@
-import { useId, useRef, useState } from "react";
+import { useEffect, useId, useRef, useState } from "react";
 import { View } from "react-native";
 import { Button } from "@/features/ui/Button";
+import { Card } from "@/features/ui/Card";
 import { Icon } from "@/features/ui/Icon";
 import { LiveText } from "@/features/ui/LiveText";
-import { Select } from "@/features/ui/Select";
 import { Text } from "@/features/ui/Text";
 import { colors } from "@/features/ui/theme";
 import { glyphs, noteName } from "@/shared/music/pitch";
-import type { MelodyVoice } from "@/shared/songs/melodyVoice";
-import { readSongFile } from "./readSongFile";
+import { lyricLines } from "@/shared/songs/lyricLines";
 import type { DraftMelody, SongDraft } from "../editor/songDraft";
+import { useTapTone } from "../melody/entry/useTapTone";
+import { useTunePlayer } from "../melody/useTunePlayer";
+import { MelodyPicture } from "./MelodyPicture";
+import { readSongFile, type SongFile } from "./readSongFile";
+import { takenFromFile } from "./takenFromFile";
+import { VoiceChoice } from "./VoiceChoice";
 
 export interface MelodyFileFieldProps {
-  melody: DraftMelody | null;
+  draft: SongDraft;
   error: string | undefined;
   onChange: (change: Partial<SongDraft>) => void;
 }
 
-/** A melody from a file: choose it, see what came out, choose among several voices. */
-export function MelodyFileField({ melody, error, onChange }: MelodyFileFieldProps) {
+type Found = Extract<SongFile, { ok: true }> & { name: string; chosen: number; taken: string | null };
+
+/** Quarter notes a minute where neither the file nor the form tells a speed. */
+const usualTempo = 96;
+
+/** A melody from a file: choose it, choose among its voices, see and hear what came out, take its words. */
+export function MelodyFileField({ draft, error, onChange }: MelodyFileFieldProps) {
   const input = useRef<HTMLInputElement>(null);
   const noteId = useId();
-  const [reading, setReading] = useState(false);
+  const reading = useRef<AbortController | null>(null);
+  const [busy, setBusy] = useState(false);
   const [refusal, setRefusal] = useState<string | null>(null);
-  const [file, setFile] = useState<{ name: string; voices: MelodyVoice[]; chosen: number } | null>(null);
+  const [file, setFile] = useState<Found | null>(null);
+  const { melody } = draft;
+  const tempo = file?.tempo ?? (Number(draft.tempo) || usualTempo);
+  const player = useTunePlayer(useTapTone(), Math.max(20, Math.min(400, tempo)));
+  useEffect(() => () => reading.current?.abort(), []);
 
-  const choose = (name: string, voices: MelodyVoice[], chosen: number) => {
-    const voice = voices[chosen];
+  const choose = (found: Found, chosen: number, more: Partial<SongDraft> = {}) => {
+    const voice = found.voices[chosen];
     if (!voice) return;
-    setFile({ name, voices, chosen });
-    const source = voices.length > 1 ? `${name}, ${voice.name}` : name;
-    onChange({ melody: { source, notes: voice.melody.notes }, home: voice.melody.home ?? "" });
+    player.stop();
+    setFile({ ...found, chosen });
+    const source = found.voices.length > 1 ? `${found.name}, ${voice.name}` : found.name;
+    onChange({ melody: { source, notes: voice.melody.notes }, home: voice.melody.home ?? "", ...more });
   };
   const read = async (given: File) => {
-    setReading(true);
+    const turn = new AbortController();
+    reading.current?.abort();
+    reading.current = turn;
+    player.stop();
+    setBusy(true);
     setRefusal(null);
-    const result = await readSongFile(given);
-    setReading(false);
-    if (result.ok) choose(given.name, result.voices, result.proposed);
-    else setRefusal(`${given.name}: ${result.reason}`);
+    const result = await readSongFile(given, { signal: turn.signal }).catch(() => null);
+    if (reading.current !== turn) return;
+    reading.current = null;
+    setBusy(false);
+    if (result === null) return;
+    if (!result.ok) {
+      setRefusal(`${given.name}: ${result.reason}`);
+      return;
+    }
+    const { change, words } = takenFromFile(draft, result);
+    choose({ ...result, name: given.name, chosen: result.proposed, taken: words }, result.proposed, change);
+  };
+  const cancel = () => {
+    reading.current?.abort();
+    reading.current = null;
+    setBusy(false);
   };
   const problem = refusal ?? error;
+  const lyrics = file?.voices[file.chosen]?.lyrics;
   return (
-    <View style={{ gap: 10 }}>
+    <View style={{ gap: 12 }}>
       <input
         ref={input}
         type="file"
@@ -59,31 +92,24 @@ export function MelodyFileField({ melody, error, onChange }: MelodyFileFieldProp
           if (given) void read(given);
         }}
       />
-      <Button
-        kind="secondary"
-        small
-        icon="file"
-        label={melody ? "Choose another file" : "Choose a file"}
-        busy={reading}
-        onPress={() => input.current?.click()}
-        style={{ alignSelf: "flex-start" }}
-      />
+      <View style={{ flexDirection: "row", flexWrap: "wrap", gap: 8 }}>
+        <Button
+          kind="secondary"
+          small
+          icon="file"
+          label={melody ? "Choose another file" : "Choose a file"}
+          busy={busy}
+          onPress={() => input.current?.click()}
+        />
+        {busy && <Button kind="text" small label="Stop reading" onPress={cancel} />}
+      </View>
       <LiveText variant="small" tone="soft">
-        {reading
+        {busy
           ? "Reading the melody."
           : melody
-            ? melodyWords(melody)
+            ? `${melodyWords(melody)} ${file?.taken ?? ""}`.trim()
             : "ABC, MIDI or MusicXML, at most 5 MB. It stays on this device until you save."}
       </LiveText>
-      {file && file.voices.length > 1 && (
-        <Select
-          label="Which voice is sung"
-          testID="melody-voice"
-          value={String(file.chosen)}
-          options={file.voices.map((voice, index) => ({ value: String(index), label: voiceWords(voice, index) }))}
-          onChange={(value) => choose(file.name, file.voices, Number(value))}
-        />
-      )}
       {problem !== undefined && (
         <View role="alert" nativeID={noteId} testID="melody-refusal" style={{ flexDirection: "row", gap: 5 }}>
           <Icon name="warning" size={16} color={colors.brick} />
@@ -92,17 +118,47 @@ export function MelodyFileField({ melody, error, onChange }: MelodyFileFieldProp
           </Text>
         </View>
       )}
+      {file && file.voices.length > 1 && (
+        <VoiceChoice
+          voices={file.voices}
+          proposed={file.proposed}
+          chosen={file.chosen}
+          onChoose={(index) => choose(file, index)}
+        />
+      )}
+      {melody && (
+        <View style={{ gap: 8 }}>
+          <MelodyPicture key={melody.source} notes={melody.notes} home={draft.home} sounding={player.at} />
+          <Button
+            kind="secondary"
+            small
+            icon={player.at === null ? "play" : "stop"}
+            label={player.at === null ? "Hear the melody" : "Stop the melody"}
+            onPress={() => (player.at === null ? player.play(melody.notes, 0) : player.stop())}
+            style={{ alignSelf: "flex-start" }}
+            testID="melody-hear"
+          />
+        </View>
+      )}
+      {lyrics && draft.chart.trim() === "" && (
+        <Card style={{ gap: 8 }}>
+          <Text variant="strong">This voice has words</Text>
+          <Text variant="small">The chart is still empty. Take the words, then set the chords over them.</Text>
+          <Button
+            kind="secondary"
+            small
+            label="Put the words into the chart"
+            onPress={() => onChange({ chart: lyricLines(lyrics).join("\n") })}
+            style={{ alignSelf: "flex-start" }}
+          />
+        </Card>
+      )}
     </View>
   );
 }
 
 function melodyWords({ source, notes }: DraftMelody): string {
   return `${notes.length} ${notes.length === 1 ? "note" : "notes"}, ${endsWords(notes)}, from ${source}.`;
-}
-
-function voiceWords(voice: MelodyVoice, index: number): string {
-  const { notes } = voice.melody;
-  return `${voice.name || `Voice ${index + 1}`}, ${notes.length} notes, ${endsWords(notes)}`;
 }
 
 function endsWords(notes: DraftMelody["notes"]): string {

@@ -68,7 +68,7 @@ export function TuneFields({ draft, errors, writtenKey, onChange }: TuneFieldsPr
           </View>
         </View>
       )}
-      {draft.tune === "melody" && <MelodyFileField melody={draft.melody} error={errors.melody} onChange={onChange} />}
+      {draft.tune === "melody" && <MelodyFileField draft={draft} error={errors.melody} onChange={onChange} />}
       {hasTune && (
         <Select
           label="Home note of the melody"

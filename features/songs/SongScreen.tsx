@@ -33,6 +33,8 @@ export interface SongScreenProps {
   card: ReactNode;
   /** when and why the key was decided, on the phone */
   decided: ReactNode;
+  /** where the tune lies, under the keys of the wide page and under the chart of the phone */
+  tune?: ReactNode;
   /** middle and right column of the wide page */
   keys: ReactNode;
   ways: ReactNode;
@@ -52,6 +54,7 @@ export function SongScreen({
   target,
   card,
   decided,
+  tune,
   keys,
   ways,
   use,
@@ -159,6 +162,7 @@ export function SongScreen({
             ]}
           >
             {keys}
+            {tune}
           </View>
           <View style={three ? { paddingTop: 14 } : { paddingTop: 24 }}>{ways}</View>
         </View>
@@ -220,6 +224,7 @@ export function SongScreen({
         </View>
         <MovedChart song={song} to={to} level={2} />
         {decided}
+        {tune}
         {tools}
       </View>
     </Screen>

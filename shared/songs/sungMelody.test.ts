@@ -36,6 +36,10 @@ test("the home note comes from the notes; from two nothing is told", () => {
   const notes = steps.map((midi, k) => ({ start: k, duration: 1, midi }));
   expect(proposeHome(notes)).toMatchObject({ tonic: "D", mode: "major" });
   expect(proposeHome(notes.slice(0, 2))).toBeNull();
+  expect(proposeHome(notes, "mixolydian")).toMatchObject({ tonic: "D", mode: "major" });
+  const minor = proposeHome(notes, "minor")!;
+  expect(minor.mode).toBe("minor");
+  expect(minor.reasons[0]).toMatch(/^Of the minor keys, as the chart is minor, /);
 });
 
 test("the smaller move is taken, and of two equal ones the one down", () => {

@@ -1,8 +1,8 @@
-import { pitchClass } from "../music/pitch";
+import { type Mode, scaleSteps } from "../music/keyName";
+import { glyphs, pitchClass } from "../music/pitch";
 import type { TakeReport } from "../voice/takeReport";
-import { findKey } from "./findKey";
+import { findKey, rankKeys } from "./findKey";
 import type { MelodyNote } from "./melody";
-import type { Mode } from "../music/keyName";
 
 /** What a listened-to take must tell for a tune to be read from it. */
 export type SungTake = Pick<TakeReport, "notes" | "range" | "tuningCents">;
@@ -47,18 +47,34 @@ export interface ProposedHome {
 const plainLead = 0.05;
 
 /**
- * Proposes the home note of a tune from its notes alone.
+ * Proposes the home note of a tune from its notes alone, or, where the chart's mode is known, among the keys of that
+ * third: a tune in A minor or C major uses the same notes.
  *
  * @param notes the notes of a tune, in order
+ * @param mode the mode of the song's chart, where there is one
  * @returns the home note with its reasons; null for fewer than three notes, from which nothing can be told
  */
-export function proposeHome(notes: readonly MelodyNote[]): ProposedHome | null {
+export function proposeHome(notes: readonly MelodyNote[], mode: Mode | null = null): ProposedHome | null {
   if (notes.length < 3) return null;
   const found = findKey({ notes });
   if (!found) return null;
   const { key, runnerUp, margin, reasons } = found;
+  if (mode !== null && isMinor(mode) !== isMinor(key.mode)) {
+    const [best, next] = rankKeys({ notes }).filter((ranked) => isMinor(ranked.key.mode) === isMinor(mode));
+    if (!best || !next) return null;
+    const third = isMinor(mode) ? "minor" : "major";
+    return {
+      ...best.key,
+      orElse: best.score - next.score < plainLead ? next.key.tonic : null,
+      reasons: [`Of the ${third} keys, as the chart is ${third}, ${glyphs(best.key.tonic)} fits its notes best.`],
+    };
+  }
   const orElse = margin < plainLead && runnerUp.tonic !== key.tonic ? runnerUp.tonic : null;
   return { ...key, orElse, reasons };
+}
+
+function isMinor(mode: Mode): boolean {
+  return scaleSteps(mode).includes(3);
 }
 
 /**

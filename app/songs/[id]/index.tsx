@@ -7,6 +7,7 @@ import { DecidedLine } from "@/features/keys/DecidedLine";
 import { KeyPane } from "@/features/keys/KeyPane";
 import { MyKeyCard } from "@/features/keys/MyKeyCard";
 import { keyInView, useSongKeys } from "@/features/keys/useSongKeys";
+import { TunePanel } from "@/features/songs/melody/TunePanel";
 import { SongScreen } from "@/features/songs/SongScreen";
 import { SongTools } from "@/features/songs/shelf/actions/SongTools";
 import { SongState } from "@/features/songs/SongState";
@@ -20,17 +21,15 @@ import { useWishes } from "@/features/ways/wishes";
 import type { Song } from "@/shared/contract/song";
 
 export default function SongRoute() {
-  const { id } = useLocalSearchParams<{ id: string }>();
   return (
-    <SongState query={useQuery(songQueries.detail(id))} title="Song">
+    <SongState query={useQuery(songQueries.detail(useLocalSearchParams<{ id: string }>().id))} title="Song">
       {(song) => <SongPage key={song.id} song={song} />}
     </SongState>
   );
 }
 
 function SongPage({ song }: { song: Song }) {
-  const [router, remove] = [useRouter(), useRemoveSong()];
-  const singer = useSingingVoice();
+  const [router, remove, singer] = [useRouter(), useRemoveSong(), useSingingVoice()];
   const [wishes] = useWishes();
   const keys = useSongKeys(song, singer);
   const { instrument, settle } = useInstrument(song.id, keys.decision?.instrument ?? null);
@@ -57,6 +56,7 @@ function SongPage({ song }: { song: Song }) {
           target={key && { key, shift, decided: decision !== null }}
           card={keys.inHand && <MyKeyCard songId={song.id} inHand={keys.inHand} voice={keys.voice} />}
           decided={keys.decision && <DecidedLine keys={keys} />}
+          tune={<TunePanel song={song} voice={singer.singing} shift={shift} />}
           keys={<KeyPane song={song} keys={keys} singer={singer.voice} selected={row} onSelect={setLooked} />}
           ways={
             <WayColumn

@@ -1,0 +1,185 @@
+import { useState, type ReactNode } from "react";
+import { View } from "react-native";
+import { Tessituragram, TessituragramLegend } from "@/features/span/Tessituragram";
+import { Button } from "@/features/ui/Button";
+import { Heading } from "@/features/ui/Heading";
+import { Notice } from "@/features/ui/Notice";
+import { Screen } from "@/features/ui/Screen";
+import { Segmented } from "@/features/ui/Segmented";
+import { Text } from "@/features/ui/Text";
+import { colors } from "@/features/ui/theme";
+import { useLayout } from "@/features/ui/useLayout";
+import { webStyle } from "@/features/ui/webStyle";
+import type { Song } from "@/shared/contract/song";
+import type { Instrument } from "@/shared/instruments/instrument";
+import type { SingingVoice } from "@/shared/keys/keyScore";
+import { tonicPitchClass } from "@/shared/music/keyName";
+import { glyphs, noteName } from "@/shared/music/pitch";
+import { useSaveSong } from "../songQueries";
+import { NoteEntry } from "./entry/NoteEntry";
+import { useTapTone } from "./entry/useTapTone";
+import { HomeChoice } from "./HomeChoice";
+import { keptTune, keptWords } from "./keptTune";
+import { SingPane, type SingButton } from "./SingPane";
+import { readSpan, SpanByHand, type SpanTexts } from "./SpanByHand";
+import { spellingOfHome } from "./spellingOfHome";
+import { TuneView } from "./TuneView";
+import { useMelodyEditor } from "./useMelodyEditor";
+import { useTunePlayer } from "./useTunePlayer";
+
+export interface MelodyScreenProps {
+  song: Song;
+  voice: SingingVoice | null;
+  instrument: Instrument;
+  /** chooses another instrument for the neck */
+  chooser: ReactNode;
+  sing: SingButton;
+  onKept: () => void;
+}
+
+type Way = "sing" | "keys" | "neck" | "ends";
+
+const ways = [
+  { value: "sing", label: "Sing" },
+  { value: "keys", label: "Keys" },
+  { value: "neck", label: "Neck" },
+  { value: "ends", label: "Ends only" },
+] as const;
+
+/** The tune of a song: sung, played in on keys or on one's own neck, or only its ends; seen, heard and changed. */
+export function MelodyScreen({ song, voice, instrument, chooser, sing, onKept }: MelodyScreenProps) {
+  const wide = useLayout() === "wide";
+  const editor = useMelodyEditor(song);
+  const save = useSaveSong();
+  const tone = useTapTone();
+  const player = useTunePlayer(tone, editor.tempo);
+  const { history, dispatch, home, proposed } = editor;
+  const { notes, chosen } = history;
+  const [way, setWay] = useState<Way>(song.tune?.kind === "span" ? "ends" : "sing");
+  const [ends, setEnds] = useState<SpanTexts>(() => endsOf(song));
+  const [tried, setTried] = useState(false);
+  const spelling = spellingOfHome(home);
+  const byEnds = way === "ends";
+  const span = readSpan(ends);
+  const endsToKeep = span.ok ? keptTune(song, { kind: "span", ...span }, span.home) : null;
+  const toKeep = byEnds ? endsToKeep : editor.toKeep;
+  const keep = () => {
+    setTried(true);
+    if (toKeep) save.mutate({ ...song, tune: toKeep.tune }, { onSuccess: onKept });
+  };
+  const say = (midi: number | undefined) => (midi === undefined ? "" : glyphs(noteName(midi, spelling)));
+  const part = chosen && `${say(notes[chosen.from]?.midi)} to ${say(notes[chosen.to]?.midi)}`;
+
+  const entry = (
+    <View style={{ gap: 14 }}>
+      <Segmented label="How the tune comes in" value={way} options={ways} onChange={setWay} testID="melody-way" />
+      {way === "sing" ? (
+        <SingPane sing={sing} count={notes.length} part={part} tempo={song.tempo} onSung={editor.sung} />
+      ) : byEnds ? (
+        <>
+          <SpanByHand texts={ends} onChange={setEnds} tried={tried} />
+          {notes.length > 0 && (
+            <Notice kind="caution" title="The notes would go">
+              The song now has a tune with all its notes. Keeping only its ends makes keys coarser.
+            </Notice>
+          )}
+          {span.ok && endsToKeep && keptWords(song, span.home, endsToKeep.move) !== null && (
+            <Text variant="small">{keptWords(song, span.home, endsToKeep.move)}</Text>
+          )}
+        </>
+      ) : (
+        <NoteEntry
+          on={way}
+          instrument={instrument}
+          chooser={chooser}
+          from={48 + (tonicPitchClass(home) > 6 ? 0 : 12)}
+          onNote={(note) => {
+            tone().play(note.midi);
+            editor.enter(note);
+          }}
+        />
+      )}
+    </View>
+  );
+  const tune = byEnds ? null : notes.length === 0 ? (
+    <Text tone="soft">No notes yet. Here they will stand as a picture over your voice and as a list to change.</Text>
+  ) : (
+    <TuneView
+      history={history}
+      dispatch={dispatch}
+      home={home}
+      spelling={spelling}
+      voice={voice}
+      sounding={player.at}
+      onPlay={() => (player.at === null ? player.play(notes, chosen?.from ?? 0) : player.stop())}
+    />
+  );
+  const about = !byEnds && notes.length > 0 && (
+    <View style={{ gap: 20 }}>
+      <HomeChoice home={home} proposed={proposed} onChange={editor.setHome} kept={editor.movedWords} />
+      <View style={{ gap: 8 }}>
+        <Heading level={2}>Where it lies</Heading>
+        <Tessituragram notes={notes} home={home} voice={voice} spelling={spelling} testID="tessituragram" />
+        <TessituragramLegend />
+      </View>
+    </View>
+  );
+  return (
+    <Screen
+      title="Melody"
+      subtitle={song.title}
+      crumb={{ label: song.title, href: { pathname: "/songs/[id]", params: { id: song.id } } }}
+      wide
+      footer={
+        <Button
+          small={wide}
+          label={byEnds ? "Keep these ends" : "Keep this tune"}
+          busy={save.isPending}
+          disabled={!byEnds && notes.length === 0}
+          onPress={keep}
+          testID="keep-melody"
+        />
+      }
+    >
+      {save.error && (
+        <Notice kind="error" title="The tune is not kept yet">
+          {`${save.error.message} Its notes are still here.`}
+        </Notice>
+      )}
+      {wide ? (
+        <View
+          style={webStyle({
+            display: "grid",
+            gridTemplateColumns: "minmax(0, 1fr) minmax(340px, 440px)",
+            columnGap: 40,
+            alignItems: "start",
+            borderTop: `1.5px solid ${colors.ink}`,
+            paddingTop: 20,
+          })}
+        >
+          <View style={{ gap: 24 }}>{tune ?? entry}</View>
+          <View style={{ gap: 28 }}>
+            {tune !== null && entry}
+            {about}
+          </View>
+        </View>
+      ) : (
+        <View style={{ gap: 24, paddingTop: 12 }}>
+          {entry}
+          {tune}
+          {about}
+        </View>
+      )}
+    </Screen>
+  );
+}
+
+function endsOf({ tune, writtenKey }: Song): SpanTexts {
+  const home = tune?.home ?? writtenKey?.tonic;
+  const name = (midi: number) => glyphs(noteName(midi, spellingOfHome(home ?? "C")));
+  if (tune?.kind !== "span" || home === undefined)
+    return { home: home === undefined ? "" : glyphs(`${home}4`), low: "", high: "" };
+  const low = Math.round(tune.lowMidi);
+  const over = low + ((tonicPitchClass(home) - (low % 12) + 12) % 12);
+  return { home: name(over), low: name(low), high: name(tune.highMidi) };
+}

@@ -1,0 +1,33 @@
+import { barWords, tessituragramWords, tunePlace } from "./tessituragramWords";
+
+const notes = [
+  { start: 0, duration: 1, midi: 60 },
+  { start: 1, duration: 1, midi: 64 },
+  { start: 2, duration: 4, midi: 67 },
+  { start: 6, duration: 2, midi: 72 },
+];
+const voice = { range: { lowMidi: 58, highMidi: 70 }, comfort: { lowMidi: 60, highMidi: 65 } };
+
+test("every bar knows its share, its place in the voice and what is held on it", () => {
+  const place = tunePlace(notes, "C", voice)!;
+  expect(place.bars).toEqual([
+    { midi: 60, share: 0.125, zone: "comfort", home: true, heldBeats: null },
+    { midi: 64, share: 0.125, zone: "comfort", home: false, heldBeats: null },
+    { midi: 67, share: 0.5, zone: "reach", home: false, heldBeats: 4 },
+    { midi: 72, share: 0.25, zone: "beyond", home: true, heldBeats: null },
+  ]);
+  expect(barWords(place)).toBe("C4 13 %, E4 13 %, G4 50 %, C5 25 %");
+});
+
+test("the picture is said in words, with and without a voice", () => {
+  const words = tessituragramWords(tunePlace(notes, "C", voice)!, voice);
+  expect(words).toEqual([
+    "The tune runs from C4 to C5.",
+    "Half of its time lies between E4 and G4, the middle at G4; the mean is near G4.",
+    "Held long: G4 for 4 beats.",
+    "Of the time 25 % in comfort, 50 % in reach, 25 % beyond your range.",
+    "Beyond: C5 above your range.",
+  ]);
+  expect(tessituragramWords(tunePlace(notes, "C", null)!, null)).toEqual(words.slice(0, 3));
+  expect(tunePlace([], "C", voice)).toBeNull();
+});

@@ -1,0 +1,90 @@
+import { useCallback, useEffect, useRef, useState } from "react";
+import { Pressable, View } from "react-native";
+import { LevelMeter } from "@/features/span/LevelMeter";
+import { PitchTrail } from "@/features/span/PitchTrail";
+import { Icon } from "@/features/ui/Icon";
+import { Text } from "@/features/ui/Text";
+import { colors, sizes } from "@/features/ui/theme";
+import { timeOf, type LiveSound } from "../recorder/liveSound";
+import { longestTakeS } from "../recorder/takeProtocol";
+import { noteWord } from "../noteWords";
+import { noteNow } from "../listening/noteNow";
+import { useHeard } from "../listening/useHeard";
+
+export interface LineListeningProps {
+  live: LiveSound;
+  seconds: number;
+  stopping: boolean;
+  onStop: () => void;
+}
+
+/** What is measured ends this long before the sound does: half a window, and the block on its way. */
+const behindS = 0.045;
+const trailHeight = 200;
+
+/** While a line is sung: the note now, the trail, how loud, how long, and Stop. */
+export function LineListening({ live, seconds, stopping, onStop }: LineListeningProps) {
+  const now = useHeard(live, ({ frames, ahead }) => {
+    const note = noteNow([...frames, ...ahead]);
+    return note ? noteWord(note.midi) : "–";
+  });
+  const level = useHeard(live, ({ peak, levelDb }) => (peak >= 0.99 ? 0 : Math.round(levelDb / 2.5) * 2.5));
+  return (
+    <View style={{ gap: 12 }}>
+      <View style={{ flexDirection: "row", alignItems: "center", gap: 16 }}>
+        <Text variant="display" style={{ minWidth: 64 }} testID="note-now">
+          {now}
+        </Text>
+        <Text variant="small" tone="soft" style={{ flexShrink: 1 }}>
+          <Text style={{ fontWeight: "600" }} tone="ink" testID="take-seconds">{`${Math.floor(seconds)} s`}</Text>
+          {` of ${longestTakeS}. A longer tune is sung in pieces.`}
+        </Text>
+      </View>
+      <Trail live={live} />
+      <LevelMeter levelDb={level} />
+      <Stop stopping={stopping} onStop={onStop} />
+    </View>
+  );
+}
+
+function Trail({ live }: { live: LiveSound }) {
+  const [width, setWidth] = useState(0);
+  const read = useCallback(
+    () => ({ frames: live.frames, ahead: live.ahead, now: Math.max(0, timeOf(live, performance.now()) - behindS) }),
+    [live],
+  );
+  return (
+    <View onLayout={({ nativeEvent }) => setWidth(nativeEvent.layout.width)} style={{ height: trailHeight }}>
+      {width > 0 && <PitchTrail read={read} width={width} height={trailHeight} testID="pitch-trail" />}
+    </View>
+  );
+}
+
+/** It has the focus while listening, so that Space or Enter ends the line. */
+function Stop({ stopping, onStop }: { stopping: boolean; onStop: () => void }) {
+  const button = useRef<View>(null);
+  useEffect(() => button.current?.focus(), []);
+  return (
+    <Pressable
+      ref={button}
+      role="button"
+      onPress={onStop}
+      disabled={stopping}
+      testID="sing-stop"
+      style={{
+        height: 64,
+        borderRadius: sizes.radius,
+        backgroundColor: colors.plum,
+        flexDirection: "row",
+        alignItems: "center",
+        justifyContent: "center",
+        gap: 10,
+      }}
+    >
+      <Icon name="stop" size={26} color={colors.onPlum} />
+      <Text variant="strong" tone="onPlum" style={{ fontSize: 20, lineHeight: 24 }}>
+        {stopping ? "Stopping" : "Stop"}
+      </Text>
+    </Pressable>
+  );
+}

@@ -61,14 +61,8 @@ const commands = {
     }
   },
 
-  async pictures() {
-    await ensurePackages({ root, say });
-    const cluster = await ensureCluster({ root, ...CLUSTERS.test });
-    await ensureWebClient({ root, say });
-    const args = [...typescript, path.join(root, "__tests__", "journeys", "takePictures.ts")];
-    const stop = () => cluster.up || stopCluster({ root, name: "test" });
-    await together([{ args, env: { TEST_DATABASE_URL: cluster.url("postgres") } }], { stop });
-  },
+  pictures: () => onStage("takePictures.ts"),
+  "bench:shelf": () => onStage("shelfBench.ts"),
 
   async engine() {
     await ensurePackages({ root, say });
@@ -85,6 +79,16 @@ const commands = {
     await together([{ args, env: {} }]);
   },
 };
+
+/** Runs a program that plays with the whole product in a browser. */
+async function onStage(program) {
+  await ensurePackages({ root, say });
+  const cluster = await ensureCluster({ root, ...CLUSTERS.test });
+  await ensureWebClient({ root, say });
+  const args = [...typescript, path.join(root, "__tests__", "journeys", program)];
+  const stop = () => cluster.up || stopCluster({ root, name: "test" });
+  await together([{ args, env: { TEST_DATABASE_URL: cluster.url("postgres") } }], { stop });
+}
 
 /** The database that the environment names, else one of our own on loopback. */
 async function ownDatabase() {

@@ -4,6 +4,6 @@ import { EditScreen } from "@/features/songs/editor/EditScreen";
 export default function NewSongRoute() {
   const router = useRouter();
   return (
-    <EditScreen song={null} onSaved={(song) => router.replace({ pathname: "/songs/[id]", params: { id: song.id } })} />
+    <EditScreen song={null} onSaved={(id) => router.replace({ pathname: "/songs/[id]", params: { id } })} />
   );
 }

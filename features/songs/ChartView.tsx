@@ -9,7 +9,7 @@ import { glyphs } from "@/shared/music/pitch";
 import type { Chart, ChartLine } from "@/shared/songs/chart";
 import type { ChartToken } from "@/shared/songs/chordLine";
 import { chartCells } from "./chartCells";
-import { firstLines, sameLine, sameLines, type ShownSection } from "./shownLines";
+import { firstLines, sameLine, sameLines, type ShownPlace, type ShownSection } from "./shownLines";
 
 export interface ChartViewProps {
   chart: Chart;
@@ -19,13 +19,15 @@ export interface ChartViewProps {
   level?: 2 | 3;
   /** so many lines and no more; else all, the later ones a moment after the first */
   most?: number;
+  /** the line that is being worked on */
+  marked?: ShownPlace | null;
 }
 
 /** Lines drawn in one go: a page or two of them, so that a very long chart never holds up the page. */
 const atOnce = 150;
 
 /** A chart to read: every chord over its syllable, at any width. */
-export function ChartView({ chart, size = 15, level = 2, most = Infinity }: ChartViewProps) {
+export function ChartView({ chart, size = 15, level = 2, most = Infinity, marked = null }: ChartViewProps) {
   const [grown, setGrown] = useState(atOnce);
   const limit = Math.min(most, grown);
   const { sections, rest } = firstLines(chart, limit);
@@ -36,7 +38,13 @@ export function ChartView({ chart, size = 15, level = 2, most = Infinity }: Char
   return (
     <View testID="chart" style={{ gap: 18 }}>
       {sections.map((section, index) => (
-        <Section key={index} section={section} size={size} level={level} />
+        <Section
+          key={index}
+          section={section}
+          size={size}
+          level={level}
+          marked={marked?.section === index ? marked.line : null}
+        />
       ))}
     </View>
   );
@@ -46,10 +54,11 @@ interface SectionProps {
   section: ShownSection;
   size: number;
   level: 2 | 3;
+  marked: number | null;
 }
 
 const Section = memo(
-  function Section({ section: { label, lines }, size, level }: SectionProps) {
+  function Section({ section: { label, lines }, size, level, marked }: SectionProps) {
     return (
       <View>
         {label !== null && (
@@ -61,7 +70,7 @@ const Section = memo(
           </View>
         )}
         {lines.map((line, index) => (
-          <Line key={index} line={line} size={size} />
+          <Line key={index} line={line} size={size} marked={index === marked} />
         ))}
       </View>
     );
@@ -69,12 +78,35 @@ const Section = memo(
   (before, now) =>
     before.size === now.size &&
     before.level === now.level &&
+    before.marked === now.marked &&
     before.section.label === now.section.label &&
     sameLines(before.section.lines, now.section.lines),
 );
 
+interface LineProps {
+  line: ChartLine;
+  size: number;
+  marked: boolean;
+}
+
 const Line = memo(
-  function Line({ line, size }: { line: ChartLine; size: number }) {
+  function Line({ marked, ...drawn }: LineProps) {
+    return marked ? (
+      <div data-marked="" style={markStyle}>
+        <DrawnLine {...drawn} />
+      </div>
+    ) : (
+      <DrawnLine {...drawn} />
+    );
+  },
+  (before, now) =>
+    before.size === now.size && before.marked === now.marked && sameLine(before.line, now.line),
+);
+
+/** A bar beside the line that stands outside of it, so that nothing moves. */
+const markStyle: CSSProperties = { boxShadow: `-7px 0 0 0 ${colors.paper}, -10px 0 0 0 ${colors.plum}` };
+
+function DrawnLine({ line, size }: Omit<LineProps, "marked">) {
     if (line.kind === "blank") return <div style={{ height: size * 0.8 }} />;
     if (line.kind === "comment")
       return (
@@ -84,9 +116,7 @@ const Line = memo(
       );
     if (line.kind === "lyrics") return <Row lyrics={line.lyrics} chords={[]} size={size} />;
     return <Row lyrics={line.kind === "sung" ? line.lyrics : ""} chords={line.chords} size={size} />;
-  },
-  (before, now) => before.size === now.size && sameLine(before.line, now.line),
-);
+}
 
 const wholes: CSSProperties = { display: "flex", flexWrap: "wrap", alignItems: "flex-end", marginBottom: 3 };
 const cellStyle: CSSProperties = { maxWidth: "100%" };

@@ -1,4 +1,5 @@
 import type { Chart, ChartLine } from "@/shared/songs/chart";
+import { rowedLines } from "@/shared/songs/chartEdits";
 
 /** A part of a chart as it is drawn: no blank lines at its ends. */
 export interface ShownSection {
@@ -18,6 +19,29 @@ export function firstLines(chart: Chart, most: number): { sections: ShownSection
     room = Math.max(0, room - used.length);
   }
   return { sections, rest };
+}
+
+/** A line as it is drawn: which section of those shown, and which line in it. */
+export interface ShownPlace {
+  section: number;
+  line: number;
+}
+
+/** Where a row of the text, counted from 0, is drawn; null for a heading, a blank row at an end, and behind the end. */
+export function shownPlace(chart: Chart, row: number): ShownPlace | null {
+  const rowed = rowedLines(chart);
+  const found = rowed.find((line) => line.start === row || line.chordRow === row || line.wordRow === row);
+  if (!found) return null;
+  let shown = -1;
+  for (const [index, { label, lines }] of chart.sections.entries()) {
+    const from = firstUsed(lines);
+    const to = lastUsed(lines);
+    if (label !== null || to >= from) shown += 1;
+    if (index !== found.section) continue;
+    const line = lines.indexOf(found.line);
+    return line >= from && line <= to ? { section: shown, line: line - from } : null;
+  }
+  return null;
 }
 
 /** Whether two lines look the same; what was read from them follows from what is written. */

@@ -34,6 +34,8 @@ const drawings = {
   play: { paths: ["M8 5.5v13l10.5-6.5z"] },
   pause: { paths: ["M8.5 5.5v13M15.5 5.5v13"] },
   again: { paths: ["M19 12a7 7 0 1 1-2.3-5.2M19 4v4h-4"] },
+  undo: { paths: ["M8.5 5 4.5 9l4 4", "M5 9h9.5a5 5 0 0 1 0 10H9"] },
+  redo: { paths: ["m15.5 5 4 4-4 4", "M19 9H9.5a5 5 0 0 0 0 10H15"] },
   back: { paths: ["m14.5 5.5-6.5 6.5 6.5 6.5"] },
   forward: { paths: ["m9.5 5.5 6.5 6.5-6.5 6.5"] },
   up: { paths: ["m5.5 14.5 6.5-6.5 6.5 6.5"] },

@@ -16,6 +16,8 @@ export interface RowedLine {
   line: ChartLine;
   /** index of its section in the chart */
   section: number;
+  /** its first row */
+  start: number;
   chordRow: number | null;
   wordRow: number | null;
 }
@@ -38,10 +40,11 @@ export function rowedLines(chart: Chart): RowedLine[] {
   chart.sections.forEach((part, section) => {
     if (part.heading !== null) row += 1;
     for (const line of part.lines) {
+      const start = row;
       const chordRow = "chords" in line ? row : null;
       if (line.kind === "sung" || line.kind === "chords") row += 1;
       const worded = line.kind === "sung" || line.kind === "lyrics";
-      lines.push({ line, section, chordRow, wordRow: worded ? row : null });
+      lines.push({ line, section, start, chordRow, wordRow: worded ? row : null });
       if (line.kind !== "chords") row += 1;
     }
   });

@@ -1,32 +1,42 @@
 import { QueryClientProvider } from "@tanstack/react-query";
-import { fireEvent, render, screen, waitFor } from "@testing-library/react";
+import { act, fireEvent, render, screen, waitFor, within } from "@testing-library/react";
 import { aSong } from "@/__tests__/client/belongings";
 import { kept, refuseStorage } from "@/__tests__/client/memoryIdb";
 import { queryClient } from "@/features/api/queryClient";
 import { shelf } from "@/features/api/shelf";
+import { songVersions } from "@/features/api/songVersions";
 import type { Song } from "@/shared/contract/song";
-import { draftStore } from "./draftStore";
+import * as cells from "../chartCells";
 import { EditScreen } from "./EditScreen";
+import { draftStore } from "./keep/draftStore";
 
 jest.mock("idb-keyval", () => jest.requireActual<{ memoryIdb: object }>("@/__tests__/client/memoryIdb").memoryIdb);
 jest.mock("expo-router", () => ({
   Link: ({ children }: { children: React.ReactNode }) => <a href="#x">{children}</a>,
+  useRouter: () => ({ push: () => undefined }),
 }));
+
+// The DOM of the tests has no window to scroll.
+HTMLElement.prototype.scrollIntoView = () => undefined;
 
 beforeEach(() => {
   localStorage.clear();
+  sessionStorage.clear();
   kept.clear();
   refuseStorage(null);
   queryClient.clear();
 });
 
+const chart = "G       C\nLow tide and still\nD       G\nthe gulls go by";
+
 function open(song: Song | null) {
-  const saved: Song[] = [];
-  const page = render(
+  const saved: string[] = [];
+  const view = (shown: Song | null) => (
     <QueryClientProvider client={queryClient}>
-      <EditScreen song={song} onSaved={(each) => saved.push(each)} />
-    </QueryClientProvider>,
+      <EditScreen song={shown} onSaved={(id) => saved.push(id)} />
+    </QueryClientProvider>
   );
+  const page = render(view(song));
   return { saved, close: page.unmount };
 }
 
@@ -34,51 +44,246 @@ const type = (testId: string, text: string) =>
   fireEvent.change(screen.getByTestId(testId), { target: { value: text } });
 const value = (testId: string) => (screen.getByTestId(testId) as HTMLInputElement).value;
 const save = () => fireEvent.click(screen.getByTestId("save-song"));
+const keptWords = () => screen.getByTestId("kept-words").textContent;
 
-test("a new song comes on the shelf, and its draft goes", async () => {
-  const { saved } = open(null);
-  type("song-title", "Slack Water");
-  type("song-chart", "G   C   D   G\nLow tide and still");
-  save();
-  await waitFor(() => expect(saved).toHaveLength(1));
-  expect(await shelf.list("songs")).toEqual(saved);
-  expect(draftStore.load(null)).toBeNull();
+describe("a new song", () => {
+  test("comes on the shelf with the key that was found, and its draft goes", async () => {
+    const { saved } = open(null);
+    type("song-title", "Slack Water");
+    type("song-chart", chart);
+    await waitFor(() => expect(screen.getByTestId("written-key-name").textContent).toBe("G major"));
+    expect(within(screen.getByTestId("preview")).getByTestId("chart").textContent).toContain("tide");
+    save();
+    await waitFor(() => expect(saved).toHaveLength(1));
+    expect(await shelf.list("songs")).toMatchObject([
+      { id: saved[0], title: "Slack Water", chart, writtenKey: { tonic: "G", mode: "major" }, tune: null, revision: 1 },
+    ]);
+    expect(draftStore.load(null)).toBeNull();
+  });
+
+  test("what is missing is said at its field, and nothing typed is lost", async () => {
+    const { saved } = open(null);
+    type("song-chart", "low tide");
+    fireEvent.click(screen.getByText("By hand"));
+    type("tune-low", "D");
+    save();
+    expect((await screen.findAllByText(/Give the song a title/)).length).toBeGreaterThan(0);
+    expect(screen.getByTestId("tune-low").getAttribute("aria-invalid")).toBe("true");
+    await waitFor(() => expect(document.activeElement).toBe(screen.getByTestId("song-title")));
+    expect(value("song-chart")).toBe("low tide");
+    expect(saved).toEqual([]);
+    expect(screen.getByRole("alert").textContent).toMatch(/things need mending/);
+    type("song-title", "x".repeat(201));
+    expect(screen.getAllByText(/at most 200/).length).toBeGreaterThan(0);
+  });
+
+  test("a page closed in the middle finds everything typed again, until it is thrown away", async () => {
+    const first = open(null);
+    expect(draftStore.load(null)).toBeNull();
+    type("song-title", "Slack");
+    await waitFor(() => expect(draftStore.load(null)?.draft.title).toBe("Slack"));
+    first.close();
+    open(null);
+    expect(screen.getByTestId("draft-restored")).toBeTruthy();
+    expect(value("song-title")).toBe("Slack");
+    fireEvent.click(screen.getByText("Start afresh"));
+    expect(value("song-title")).toBe("");
+    expect(screen.queryByTestId("draft-restored")).toBeNull();
+  });
+
+  test("a device that keeps nothing is told, everything typed stays, and a second try puts the song once", async () => {
+    const { saved } = open(null);
+    type("song-title", "Slack Water");
+    refuseStorage(new DOMException("full", "QuotaExceededError"));
+    save();
+    await waitFor(() =>
+      expect(screen.getByRole("alert").textContent).toMatch(/no room left.*Everything you typed is still here/),
+    );
+    expect(value("song-title")).toBe("Slack Water");
+    refuseStorage(null);
+    save();
+    await waitFor(() => expect(saved).toHaveLength(1));
+    expect(await shelf.list("songs")).toHaveLength(1);
+  });
+
+  test("typing in the title draws nothing of the chart anew", async () => {
+    open(null);
+    type("song-chart", chart);
+    await waitFor(() => expect(screen.getByTestId("preview").textContent).toContain("gulls"));
+    const spy = jest.spyOn(cells, "chartCells");
+    type("song-title", "Slack Water");
+    await waitFor(() => expect(draftStore.load(null)?.draft.title).toBe("Slack Water"));
+    expect(spy).not.toHaveBeenCalled();
+    type("song-chart", `${chart}s`);
+    await waitFor(() => expect(spy).toHaveBeenCalledTimes(1));
+    spy.mockRestore();
+  });
+
+  test("signs that are no chords are listed with line and column, and lead there", async () => {
+    open(null);
+    type("song-chart", "G   C   Hx#  D\nLow tide and still");
+    await waitFor(() => expect(screen.getByTestId("unread").textContent).toContain("Hx#"));
+    fireEvent.click(screen.getByText("line 1, column 9"));
+    const field = screen.getByTestId("song-chart") as HTMLTextAreaElement;
+    expect(document.activeElement).toBe(field);
+    expect([field.selectionStart, field.selectionEnd]).toEqual([8, 11]);
+  });
+
+  test("the key can be changed by hand and given back", async () => {
+    open(null);
+    type("song-chart", chart);
+    await waitFor(() => expect(screen.getByTestId("written-key-name").textContent).toBe("G major"));
+    fireEvent.click(screen.getByTestId("another-key"));
+    fireEvent.change(screen.getByTestId("key-mode"), { target: { value: "mixolydian" } });
+    expect(screen.getByTestId("written-key-name").textContent).toBe("G mixolydian");
+    fireEvent.click(screen.getByText("Use G major"));
+    expect(screen.getByTestId("written-key-name").textContent).toBe("G major");
+  });
 });
 
-test("a page closed in the middle finds everything typed again, until it is thrown away", async () => {
-  const first = open(null);
-  type("song-title", "Slack");
-  await waitFor(() => expect(draftStore.load(null)?.title).toBe("Slack"));
-  first.close();
-  open(null);
-  expect(screen.getByTestId("draft-restored")).toBeTruthy();
-  expect(value("song-title")).toBe("Slack");
-  fireEvent.click(screen.getByText("Start afresh"));
-  expect(value("song-title")).toBe("");
-  expect(screen.queryByTestId("draft-restored")).toBeNull();
+describe("going back and forth", () => {
+  test("by buttons and by keys, over text and parts alike", async () => {
+    open(null);
+    type("song-chart", `Verse\n${chart}`);
+    fireEvent.click(await screen.findByText("Parts"));
+    fireEvent.click(screen.getByTestId("part-name-0"));
+    fireEvent.click(screen.getByTestId("once-more"));
+    expect(draftStore.load(null)?.draft.chart).toBe(`Verse x2\n${chart}`);
+    fireEvent.click(screen.getByTestId("undo"));
+    expect(draftStore.load(null)?.draft.chart).toBe(`Verse\n${chart}`);
+    fireEvent.keyDown(document.body, { key: "z", ctrlKey: true });
+    expect(draftStore.load(null)?.draft.chart).toBe("");
+    fireEvent.keyDown(document.body, { key: "Z", ctrlKey: true, shiftKey: true });
+    fireEvent.keyDown(document.body, { key: "y", ctrlKey: true });
+    expect(draftStore.load(null)?.draft.chart).toBe(`Verse x2\n${chart}`);
+    expect(screen.getByTestId("redo").getAttribute("aria-disabled")).toBe("true");
+  });
+
+  test("chords that are not spelled by their key are set right by one touch, which can be taken back", async () => {
+    open(null);
+    const written = "F  A#  C  F\nlow tide and still\nF  A#  C  F\nthe gulls go by";
+    type("song-chart", written);
+    fireEvent.click(await screen.findByTestId("respell-now"));
+    expect(value("song-chart")).toBe(written.replaceAll("A#", "Bb"));
+    await waitFor(() => expect(screen.queryByTestId("respell")).toBeNull());
+    fireEvent.click(screen.getByTestId("undo"));
+    expect(value("song-chart")).toBe(written);
+  });
 });
 
-test("a device that keeps nothing is told, everything typed stays, and a second try puts the song once", async () => {
-  const { saved } = open(null);
-  type("song-title", "Slack Water");
-  refuseStorage(new DOMException("full", "QuotaExceededError"));
-  save();
-  await waitFor(() =>
-    expect(screen.getByRole("alert").textContent).toMatch(/no room left.*Everything you typed is still here/),
-  );
-  expect(value("song-title")).toBe("Slack Water");
-  refuseStorage(null);
-  save();
-  await waitFor(() => expect(saved).toHaveLength(1));
-  expect(await shelf.list("songs")).toHaveLength(1);
+describe("placing chords", () => {
+  const spot = (label: string) => screen.getByRole("button", { name: label });
+
+  test("a syllable, then a chord; again to change, nudge and take away", async () => {
+    open(null);
+    type("song-chart", "G   D   C   G\nlow tide and still\n\nharbour lights");
+    await waitFor(() => expect(screen.getByTestId("written-key-name").textContent).toBe("G major"));
+    fireEvent.click(screen.getByText("Place chords"));
+    const names = within(screen.getByTestId("palette"))
+      .getAllByRole("button")
+      .map((button) => button.getAttribute("aria-label"));
+    expect(names.slice(0, 4)).toEqual(["G, I", "C, IV", "D, V", "Em, vi"]);
+    fireEvent.click(spot("“bour” of harbour, line 4"));
+    fireEvent.click(screen.getByRole("button", { name: "C, IV" }));
+    const text = () => draftStore.load(null)?.draft.chart.split("\n").slice(3).join("\n");
+    expect(text()).toBe("   C\nharbour lights");
+    expect(screen.getByTestId("place-words").textContent).toBe("C over “bour” of harbour, line 5");
+    fireEvent.click(screen.getByTestId("nudge-right"));
+    expect(text()).toBe("    C\nharbour lights");
+    fireEvent.click(screen.getByRole("button", { name: "D, V" }));
+    expect(text()).toBe("    D\nharbour lights");
+    fireEvent.click(screen.getByTestId("remove-chord"));
+    expect(text()).toBe("harbour lights");
+  });
+
+  test("by keys alone, and with a chord of one's own; what cannot be read is told", () => {
+    open(null);
+    type("song-chart", "G   D\nlow tide");
+    fireEvent.click(screen.getByText("Place chords"));
+    fireEvent.focus(spot("G over “low”, line 2"));
+    fireEvent.keyDown(spot("G over “low”, line 2"), { key: "Delete" });
+    expect(draftStore.load(null)?.draft.chart).toBe("    D\nlow tide");
+    fireEvent.click(screen.getByTestId("other"));
+    type("other-chord", "Quux");
+    fireEvent.click(screen.getByTestId("put-other"));
+    expect(screen.getByTestId("place-words").textContent).toMatch(/cannot be read/);
+    type("other-chord", "Am7");
+    fireEvent.click(screen.getByTestId("put-other"));
+    expect(draftStore.load(null)?.draft.chart).toBe("Am7 D\nlow tide");
+  });
 });
 
-test("a song that is changed keeps its address, its demonstration mark and its day", async () => {
-  const song = aSong({ demo: "ferry" });
-  await shelf.put("songs", song);
-  const { saved } = open(song);
-  type("song-title", "Another name");
-  save();
-  await waitFor(() => expect(saved).toHaveLength(1));
-  expect(await shelf.get("songs", song.id)).toEqual({ ...song, title: "Another name" });
+describe("a song on the shelf", () => {
+  beforeEach(() => jest.useFakeTimers());
+  afterEach(() => jest.useRealTimers());
+  const pass = (ms: number) => act(() => jest.advanceTimersByTimeAsync(ms));
+
+  test("is kept by itself a moment after typing, with its address, its mark and its day", async () => {
+    const song = await shelf.put("songs", aSong({ demo: "ferry", revision: 0 }));
+    open(song);
+    expect(keptWords()).toBe("Changes are kept by themselves");
+    type("song-title", "Another name");
+    expect(draftStore.load(song.id)?.draft.title).toBe("Another name");
+    await pass(2000);
+    expect(keptWords()).toMatch(/^Kept \d\d:\d\d$/);
+    expect(await shelf.get("songs", song.id)).toEqual({ ...song, title: "Another name", revision: 2 });
+    expect(draftStore.load(song.id)).toBeNull();
+  });
+
+  test("is kept when the page is left before that moment", async () => {
+    const song = await shelf.put("songs", aSong({ revision: 0 }));
+    const page = open(song);
+    type("song-title", "Left in haste");
+    page.close();
+    await pass(0);
+    expect((await shelf.get("songs", song.id)).title).toBe("Left in haste");
+  });
+
+  test("is not kept without a title, and says so at the field", async () => {
+    const song = await shelf.put("songs", aSong({ revision: 0 }));
+    open(song);
+    type("song-title", "");
+    await pass(2000);
+    expect(keptWords()).toMatch(/something needs mending/);
+    expect(screen.getByTestId("song-title").getAttribute("aria-invalid")).toBe("true");
+    expect((await shelf.get("songs", song.id)).title).toBe(song.title);
+  });
+
+  test("a change elsewhere is told, both go together, and both stay in the earlier versions", async () => {
+    const song = await shelf.put("songs", aSong({ title: "Slack", chart: "one\ntwo\nthree", revision: 0 }));
+    const { saved } = open(song);
+    await shelf.put("songs", { ...song, chart: "one\ntwo\nthree there" });
+    type("song-chart", "one here\ntwo\nthree");
+    await pass(2000);
+    expect(screen.getByTestId("clash").textContent).toMatch(/Both changes fit together/);
+    fireEvent.click(screen.getByTestId("clash-merge"));
+    await pass(2000);
+    expect((await shelf.get("songs", song.id)).chart).toBe("one here\ntwo\nthree there");
+    expect(value("song-chart")).toBe("one here\ntwo\nthree there");
+    fireEvent.click(screen.getByTestId("undo"));
+    expect(value("song-chart")).toBe("one here\ntwo\nthree");
+    fireEvent.click(screen.getByTestId("redo"));
+    save();
+    await pass(0);
+    expect(saved).toEqual([song.id]);
+    const versions = await songVersions.list(song.id);
+    expect(versions).toHaveLength(2);
+  });
+
+  test("where both changed the same line, one chooses; taking theirs keeps mine in the earlier versions", async () => {
+    const song = await shelf.put("songs", aSong({ chart: "one\ntwo", revision: 0 }));
+    open(song);
+    await shelf.put("songs", { ...song, chart: "one there\ntwo" });
+    type("song-chart", "one here\ntwo");
+    await pass(2000);
+    expect(screen.getByTestId("clash").textContent).toMatch(/One place was changed in both.*one here.*one there/);
+    fireEvent.click(screen.getByTestId("clash-theirs"));
+    await pass(2000);
+    expect((await shelf.get("songs", song.id)).chart).toBe("one there\ntwo");
+    const entries = await songVersions.list(song.id);
+    const charts = await Promise.all(entries.map(async ({ id }) => (await songVersions.get(song.id, id)).song.chart));
+    expect(charts).toContain("one here\ntwo");
+    expect(charts).toContain("one there\ntwo");
+    expect(keptWords()).toMatch(/^Kept/);
+  });
 });

@@ -1,157 +1,174 @@
-import { useDeferredValue, useEffect, useMemo, useState } from "react";
-import { Controller, useForm, useWatch } from "react-hook-form";
+import { useRef, useState, type ReactNode, type RefObject } from "react";
 import { View } from "react-native";
 import { Field } from "@/features/ui/Field";
-import { Form } from "@/features/ui/Form";
-import { Notice } from "@/features/ui/Notice";
+import { Segmented } from "@/features/ui/Segmented";
 import { useLayout } from "@/features/ui/useLayout";
-import type { Song } from "@/shared/contract/song";
-import { parseChart } from "@/shared/songs/chart";
-import { findKey } from "@/shared/songs/findKey";
-import { ChartPreview } from "./ChartPreview";
-import { draftStore } from "./draftStore";
-import { KeyChooser } from "./KeyChooser";
-import { draftErrors, songFromDraft, type DraftErrors, type SongDraft, type SongOrigin } from "./songDraft";
+import { webStyle } from "@/features/ui/webStyle";
 import { TuneFields } from "../melody/TuneFields";
+import { caretRow } from "./chartBox";
+import { ChartPreview } from "./ChartPreview";
+import { KeyChooser } from "./KeyChooser";
+import { PartList } from "./parts/PartList";
+import { PlaceBar } from "./place/PlaceBar";
+import { PlaceChords } from "./place/PlaceChords";
+import type { Placing } from "./place/usePlacing";
+import { RespellOffer } from "./RespellOffer";
+import type { DraftErrors } from "./songDraft";
 import { UnreadSigns } from "./UnreadSigns";
+import type { ChartReading } from "./useChartReading";
+import type { SongEdits } from "./useSongEdits";
+
+/** What is done with the chart at the moment. */
+export type EditMode = "type" | "place" | "parts";
 
 export interface SongFormProps {
-  /** what stands in it at first */
-  draft: SongDraft;
-  /** the song being changed; null for a new one */
-  songId: string | null;
-  origin: () => SongOrigin;
-  /** what kept the song from being saved; everything typed stays */
-  problem: Error | null;
-  onSave: (song: Song) => void;
-  /** the sending button stands in the frame around the form */
-  frame: (form: React.ReactNode, submit: () => void) => React.ReactNode;
+  edits: SongEdits;
+  reading: ChartReading;
+  errors: DraftErrors;
+  mode: EditMode;
+  onMode: (mode: EditMode) => void;
+  placing: Placing;
+  /** around the field of the chart */
+  chartBox: RefObject<HTMLDivElement | null>;
+  /** takes the caret to a place of the text, from 0 */
+  onShow: (row: number, column: number, length: number) => void;
 }
 
-/** Title, chart, key and melody of a song. Every letter is kept on this device until the song is saved. */
-export function SongForm({ draft, songId, origin, problem, onSave, frame }: SongFormProps) {
-  const { control, handleSubmit, setValue, setError, clearErrors, formState } = useForm<SongDraft>({
-    defaultValues: draft,
-  });
-  const typed = { ...draft, ...useWatch({ control }) } as SongDraft;
-  const chartText = useDeferredValue(typed.chart);
-  const chart = useMemo(() => parseChart(chartText), [chartText]);
-  const notes = typed.tune === "melody" ? typed.melody?.notes : undefined;
-  const finding = useMemo(() => findKey({ chart, ...(notes ? { notes } : null) }), [chart, notes]);
-  const wide = useLayout() !== "phone";
-  const kept = JSON.stringify(typed);
-  const untouched = useMemo(() => JSON.stringify(draft), [draft]);
-  useEffect(() => {
-    if (kept !== untouched) draftStore.save(songId, JSON.parse(kept) as SongDraft);
-  }, [kept, untouched, songId]);
+const previewHeight = 560;
 
-  const [refusals, setRefusals] = useState(0);
-  useEffect(() => {
-    if (refusals > 0) document.querySelector<HTMLElement>('form [aria-invalid="true"]')?.focus();
-  }, [refusals]);
-
-  const errors: DraftErrors = Object.fromEntries(
-    Object.entries(formState.errors).map(([name, error]) => [name, error?.message]),
-  );
-  const change = (changes: Partial<SongDraft>) => {
-    clearErrors(Object.keys(changes) as (keyof SongDraft)[]);
-    for (const [name, value] of Object.entries(changes))
-      setValue(name as keyof SongDraft, value as never, { shouldDirty: true });
-  };
-  const submit = handleSubmit((values) => {
-    // The deferred chart may lag behind the last letter typed.
-    const found = findKey({ chart: parseChart(values.chart), ...(notes ? { notes } : null) })?.key ?? null;
-    const wrong = Object.entries(draftErrors(values, found)) as [keyof SongDraft, string][];
-    for (const [name, message] of wrong) setError(name, { message });
-    if (wrong.length > 0) setRefusals(refusals + 1);
-    else onSave(songFromDraft(values, found, origin()));
-  });
+/** Title, chart, parts, key and melody of a song. */
+export function SongForm({ edits, reading, errors, mode, onMode, placing, chartBox, onShow }: SongFormProps) {
+  const { draft, change } = edits;
+  const { chart, finding } = reading;
+  const layout = useLayout();
+  const phone = layout === "phone";
+  const wide = layout === "wide";
+  const [row, setRow] = useState<number | null>(null);
+  const key = draft.key ?? finding?.key ?? null;
+  const onText = useRef((text: string) => change({ chart: text })).current;
 
   const text = (
-    name: "title" | "chart" | "beatsPerBar" | "tempo",
+    name: "title" | "beatsPerBar" | "tempo",
     label: string,
     more: Partial<React.ComponentProps<typeof Field>>,
   ) => (
-    <Controller
-      control={control}
-      name={name}
-      render={({ field }) => (
-        <Field
-          label={label}
-          value={field.value}
-          onBlur={field.onBlur}
-          onChangeText={(value) => {
-            clearErrors(name);
-            field.onChange(value);
-          }}
-          error={errors[name]}
-          testID={`song-${name}`}
-          {...more}
-        />
-      )}
-    />
+    <View style={{ flexGrow: name === "title" ? 4 : 1, flexBasis: name === "title" ? 260 : 120, minWidth: 0 }}>
+      <Field
+        label={label}
+        value={draft[name]}
+        onChangeText={(value) => change({ [name]: value }, name)}
+        error={errors[name]}
+        testID={`song-${name}`}
+        {...more}
+      />
+    </View>
   );
-  const column = { flexGrow: 1, flexShrink: 1, flexBasis: 0, minWidth: 0, gap: 20 } as const;
-  const wrong = Object.values(errors).filter((message) => message !== undefined);
-  const form = (
-    <Form label="Song" onSubmit={() => void submit()} gap={20}>
-      {problem && (
-        <Notice
-          kind="error"
-          title="The song is not saved yet"
-        >{`${problem.message} Everything you typed is still here.`}</Notice>
+  const typing = (
+    <div ref={chartBox} onSelect={() => setRow(caretRow(chartBox.current))}>
+      <Field
+        label="Chart, chords over lyrics"
+        value={draft.chart}
+        onChangeText={(value) => change({ chart: value }, "chart")}
+        error={errors.chart}
+        multiline
+        mono
+        rows={wide ? 22 : 12}
+        hint="Paste or type it: a line of chords, under it the words. Name the parts, like Verse or Chorus, on lines of their own."
+        testID="song-chart"
+      />
+    </div>
+  );
+  const chartColumn = (
+    <View style={{ gap: 16, minWidth: 0 }}>
+      <Segmented<EditMode>
+        label="What to do with the chart"
+        testID="edit-mode"
+        value={wide && mode === "parts" ? "type" : mode}
+        options={[
+          { value: "type", label: "Type" },
+          { value: "place", label: "Place chords" },
+          ...(wide ? [] : [{ value: "parts" as const, label: "Parts" }]),
+        ]}
+        onChange={onMode}
+      />
+      {mode === "place" ? (
+        <PlaceChords placing={placing} onDone={() => onMode("type")} />
+      ) : mode === "parts" && !wide ? null : (
+        typing
       )}
-      {wrong.length > 0 && (
-        <Notice
-          kind="error"
-          title={wrong.length === 1 ? "One thing needs mending" : `${wrong.length} things need mending`}
-        >
-          {wrong.join(" ")}
-        </Notice>
+      {mode === "place" && !phone && (
+        <Bar>
+          <PlaceBar placing={placing} />
+        </Bar>
       )}
-      <View style={{ flexDirection: wide ? "row" : "column", gap: wide ? 32 : 20, alignItems: "stretch" }}>
-        <View style={wide ? column : { gap: 20 }}>
-          {text("title", "Title", { autoComplete: "off" })}
-          {text("chart", "Chart, chords over lyrics", {
-            multiline: true,
-            mono: true,
-            rows: wide ? 16 : 10,
-            hint: "Paste or type it: a line of chords, under it the words. Name the parts, like Verse or Chorus, on lines of their own.",
-          })}
-          <UnreadSigns signs={chart.unread} />
-          {!wide && <ChartPreview chart={chart} />}
-          <View style={{ flexDirection: "row", gap: 12 }}>
-            <View style={{ flexGrow: 1, flexBasis: 0, minWidth: 0 }}>
+      <RespellOffer text={draft.chart} writtenKey={key} onText={onText} />
+      <UnreadSigns signs={chart.unread} onShow={(sign) => onShow(sign.line - 1, sign.column - 1, sign.text.length)} />
+    </View>
+  );
+  const parts = (
+    <PartList text={draft.chart} onText={onText} onShow={wide ? (at) => onShow(at, 0, 0) : () => undefined} />
+  );
+  const preview = <ChartPreview chart={chart} row={wide ? row : null} height={wide ? previewHeight : null} />;
+  const tune = <TuneFields draft={draft} errors={errors} writtenKey={key} onChange={(changes) => change(changes)} />;
+  const keyCard = <KeyChooser finding={finding} chosen={draft.key} onChoose={(chosen) => change({ key: chosen })} />;
+  const facts = (
+    <View style={{ flexDirection: "row", flexWrap: "wrap", gap: 12 }}>
+      {text("title", "Title", { autoComplete: "off" })}
+      {!phone && text("beatsPerBar", "Beats in a bar", { inputMode: "numeric" })}
+      {!phone && text("tempo", "Beats a minute", { inputMode: "numeric", hint: "May stay empty" })}
+    </View>
+  );
+  if (phone)
+    return (
+      <View style={{ gap: 20 }}>
+        {mode === "type" && facts}
+        {chartColumn}
+        {mode === "parts" && parts}
+        {mode === "type" && (
+          <>
+            {preview}
+            <View style={{ flexDirection: "row", gap: 12 }}>
               {text("beatsPerBar", "Beats in a bar", { inputMode: "numeric" })}
-            </View>
-            <View style={{ flexGrow: 1, flexBasis: 0, minWidth: 0 }}>
               {text("tempo", "Beats a minute", { inputMode: "numeric", hint: "May stay empty" })}
             </View>
-          </View>
-          {wide && (
-            <TuneFields
-              draft={typed}
-              errors={errors}
-              writtenKey={typed.key ?? finding?.key ?? null}
-              onChange={change}
-            />
-          )}
-        </View>
-        <View style={wide ? column : { gap: 20 }}>
-          <KeyChooser finding={finding} chosen={typed.key} onChoose={(key) => change({ key })} />
-          {wide ? (
-            <ChartPreview chart={chart} />
-          ) : (
-            <TuneFields
-              draft={typed}
-              errors={errors}
-              writtenKey={typed.key ?? finding?.key ?? null}
-              onChange={change}
-            />
-          )}
-        </View>
+            {keyCard}
+            {tune}
+          </>
+        )}
       </View>
-    </Form>
+    );
+  return (
+    <View style={{ gap: 24 }}>
+      {facts}
+      <Columns to={wide ? "minmax(0, 11fr) minmax(0, 10fr) 264px" : "minmax(0, 1fr) minmax(0, 1fr)"}>
+        {chartColumn}
+        {preview}
+        {wide && parts}
+      </Columns>
+      {!wide && mode === "parts" && parts}
+      <Columns to="minmax(0, 1fr) minmax(0, 1fr)">
+        {keyCard}
+        {tune}
+      </Columns>
+    </View>
   );
-  return frame(form, () => void submit());
+}
+
+function Columns({ to, children }: { to: string; children: ReactNode }) {
+  return (
+    <View
+      style={webStyle({ display: "grid", gridTemplateColumns: to, columnGap: 32, rowGap: 24, alignItems: "start" })}
+    >
+      {children}
+    </View>
+  );
+}
+
+/** Stays in sight at the foot of the window while the words are scrolled. */
+function Bar({ children }: { children: ReactNode }) {
+  return (
+    <View style={webStyle({ position: "sticky", bottom: 0, background: "var(--paper)", paddingBlock: 8, zIndex: 1 })}>
+      {children}
+    </View>
+  );
 }

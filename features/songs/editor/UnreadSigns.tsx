@@ -1,12 +1,19 @@
 import { View } from "react-native";
+import { Button } from "@/features/ui/Button";
 import { Notice } from "@/features/ui/Notice";
 import { Text } from "@/features/ui/Text";
 import type { UnreadSign } from "@/shared/songs/chart";
 
 const shown = 6;
 
-/** What on the chord lines could not be read, and where it stands. It is kept as it is. */
-export function UnreadSigns({ signs }: { signs: readonly UnreadSign[] }) {
+/** What on the chord lines could not be read, and where it stands: each leads there. It is kept as it is. */
+export function UnreadSigns({
+  signs,
+  onShow,
+}: {
+  signs: readonly UnreadSign[];
+  onShow: (sign: UnreadSign) => void;
+}) {
   if (signs.length === 0) return null;
   const more = signs.length - shown;
   return (
@@ -22,12 +29,18 @@ export function UnreadSigns({ signs }: { signs: readonly UnreadSign[] }) {
           <View
             role="listitem"
             key={`${sign.line},${sign.column}`}
-            style={{ flexDirection: "row", gap: 8, flexWrap: "wrap" }}
+            style={{ flexDirection: "row", columnGap: 8, flexWrap: "wrap", alignItems: "center" }}
           >
             <Text variant="monoBold" style={{ fontSize: 14, lineHeight: 20 }}>
               {sign.text}
             </Text>
-            <Text variant="small">{`line ${sign.line}, column ${sign.column}`}</Text>
+            <Button
+              kind="text"
+              small
+              label={`line ${sign.line}, column ${sign.column}`}
+              accessibleName={`${sign.text}: go to line ${sign.line}, column ${sign.column}`}
+              onPress={() => onShow(sign)}
+            />
           </View>
         ))}
       </View>

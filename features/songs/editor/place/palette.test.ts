@@ -1,0 +1,27 @@
+import { parseChart } from "@/shared/songs/chart";
+import { chordPalette } from "./palette";
+
+const texts = (list: readonly { text: string }[]) => list.map(({ text }) => text);
+
+test("the song's own chords by their numbers, I IV V first, then the rest of the key", () => {
+  const chart = parseChart("Em  Bm7  D   A7   G  Bb  A  D/F#\nlow tide and still we row along home\n");
+  const { own, others } = chordPalette(chart, { tonic: "D", mode: "major" });
+  expect(texts(own)).toEqual(["D", "D/F#", "G", "A", "A7", "Bm7", "Em", "Bb"]);
+  expect(own.map(({ roman }) => roman)).toEqual(["I", "I/3", "IV", "V", "V7", "vi7", "ii", "bVI"]);
+  expect(texts(others)).toEqual(["Bm", "F#m", "C#dim"]);
+});
+
+test("a minor key has its own triads", () => {
+  const { others } = chordPalette(parseChart(""), { tonic: "A", mode: "minor" });
+  expect(texts(others)).toEqual(["Am", "Dm", "Em", "F", "Bdim", "C", "G"]);
+});
+
+test("without a key they stand as they came", () => {
+  expect(chordPalette(parseChart("Em  C\nlow tide"), null)).toEqual({
+    own: [
+      { text: "Em", roman: null },
+      { text: "C", roman: null },
+    ],
+    others: [],
+  });
+});

@@ -17,6 +17,7 @@ const parts: LazyPart[] = [
   () => import("./songs/[id]/ways"),
   () => import("@/shared/ways/findWays"),
   () => import("./songs/[id]/edit"),
+  () => import("./songs/[id]/history"),
   () => import("./songs/[id]/melody"),
   () => import("./songs/[id]/recording"),
   () => import("./songs/new"),

@@ -40,7 +40,7 @@ export function pitchSpread(notes: readonly SungNote[]): NonNullable<TakeReport[
  * @returns cents, -50 to 50; 0 without notes
  * @see N. I. Fisher, Statistical Analysis of Circular Data, 1993 (mean direction)
  */
-export function commonTuning(notes: readonly SungNote[]): number {
+export function commonTuning(notes: readonly Pick<SungNote, "start" | "end" | "midi">[]): number {
   let x = 0;
   let y = 0;
   for (const note of notes) {

@@ -12,13 +12,15 @@ import { StopSigns } from "./StopSigns";
 export interface BeforeGuidedProps {
   /** the note the way starts from, by name; null where the singer hums first */
   from: string | null;
+  /** what was said of this voice before */
+  under16: boolean;
   onStart: (under16: boolean) => void;
 }
 
 /** What will happen, when to stop, and the button that starts it. Nothing sounds before. */
-export function BeforeGuided({ from, onStart }: BeforeGuidedProps) {
+export function BeforeGuided({ from, under16, onStart }: BeforeGuidedProps) {
   const wide = useLayout() === "wide";
-  const [age, setAge] = useState<"adult" | "young">("adult");
+  const [age, setAge] = useState<"adult" | "young">(under16 ? "young" : "adult");
   const young = age === "young";
   return (
     <Screen

@@ -7,7 +7,7 @@ import { colors, mixtures } from "@/features/ui/theme";
 import { noteWord } from "../noteWords";
 import { useHeard } from "../listening/useHeard";
 import type { LiveSound } from "../recorder/liveSound";
-import { holdNow } from "./guidedHold";
+import { holdNow } from "./hearing/guidedHold";
 import type { GuidedRun } from "./guidedSteps";
 
 export interface GuidedLadderProps {

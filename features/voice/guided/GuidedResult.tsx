@@ -26,7 +26,7 @@ export function GuidedResult({ state, onFound }: GuidedResultProps) {
   const ends = shownEnds(run);
   const reach = { lowMidi: findings.lowMidi, highMidi: findings.highMidi };
   const sing = { lowMidi: singLow, highMidi: singHigh };
-  const { notes } = takeOfHolds(run, findings, "");
+  const { notes, tuningCents } = takeOfHolds(run, findings, "");
   return (
     <View
       style={{
@@ -36,7 +36,7 @@ export function GuidedResult({ state, onFound }: GuidedResultProps) {
       }}
       testID="guided-result"
     >
-      <VoiceLadder voice={{ range: reach, comfort: sing }} times={timeOnNotes(notes, 0)} ends="held" />
+      <VoiceLadder voice={{ range: reach, comfort: sing }} times={timeOnNotes(notes, tuningCents)} ends="held" />
       <View style={[{ gap: 20 }, wide ? { flexGrow: 1, flexBasis: 0, maxWidth: 560 } : null]}>
         {brokenOff && (
           <Notice kind="caution" title="The sound broke off">

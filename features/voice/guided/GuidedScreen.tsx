@@ -15,11 +15,14 @@ import { noteWord, whenWords } from "../noteWords";
 import { useSingingVoice } from "../useSingingVoice";
 import { newVoice, useKeepHolds, voiceQueries } from "../voiceQueries";
 import { BeforeGuided } from "./BeforeGuided";
+import { GuidedPaused } from "./GuidedPaused";
 import { GuidedResult } from "./GuidedResult";
-import { GuidedStep } from "./GuidedStep";
+import { GuidedStep, type OnTheWay } from "./GuidedStep";
 import type { GuidedFindings, GuidedState } from "./guidedSteps";
+import { dropUnkeptRun } from "./unkeptRun";
 import { GuidedTurn } from "./GuidedTurn";
 import { announcement, failedWords } from "./guidedWords";
+import { isUnder16, rememberAge } from "./singerAge";
 import { takeOfHolds } from "./takeOfHolds";
 import { useGuided } from "./useGuided";
 
@@ -39,7 +42,15 @@ export function GuidedScreen({ voiceId, onKept }: GuidedScreenProps) {
     tell({ kind: "start", id: newId(), startedAt: new Date().toISOString(), home, under16 });
   return (
     <>
-      {state.step === "before" && <BeforeGuided from={home === null ? null : noteWord(home)} onStart={start} />}
+      {state.step === "before" && (
+        <BeforeGuided
+          key={voice?.id ?? ""}
+          from={home === null ? null : noteWord(home)}
+          under16={isUnder16(voice?.id ?? null)}
+          onStart={start}
+        />
+      )}
+      {state.step === "paused" && <GuidedPaused state={state} onTell={tell} />}
       {state.step === "failed" && <Failed why={state.why} onAgain={() => tell({ kind: "leave" })} />}
       {state.step === "turn" && <GuidedTurn run={state.run} onTell={tell} />}
       {state.step === "done" && (
@@ -51,12 +62,16 @@ export function GuidedScreen({ voiceId, onKept }: GuidedScreenProps) {
           onKept={onKept}
         />
       )}
-      {state.step !== "before" && state.step !== "failed" && state.step !== "turn" && state.step !== "done" && (
-        <GuidedStep state={state} live={live} onTell={tell} />
-      )}
+      {onTheWay(state) && <GuidedStep state={state} live={live} onTell={tell} />}
       <LiveText hidden>{announcement(state)}</LiveText>
     </>
   );
+}
+
+const pages = new Set<GuidedState["step"]>(["before", "paused", "failed", "turn", "done"]);
+
+function onTheWay(state: GuidedState): state is OnTheWay {
+  return !pages.has(state.step);
 }
 
 interface ResultProps {
@@ -73,7 +88,16 @@ function Result({ state, chosenId, onFound, onAgain, onKept }: ResultProps) {
   const [first] = useState(() => newVoice("My voice"));
   const [choosing, setChoosing] = useState(false);
   const keepIn = (voice: Voice) =>
-    keep.mutate({ take: takeOfHolds(state.run, state.findings, voice.id), voice }, { onSuccess: onKept });
+    keep.mutate(
+      { take: takeOfHolds(state.run, state.findings, voice.id), voice },
+      {
+        onSuccess: () => {
+          rememberAge(voice.id, state.run.under16);
+          dropUnkeptRun();
+          onKept();
+        },
+      },
+    );
   const many = (voices.data ?? []).length > 0;
   return (
     <Screen
@@ -142,7 +166,7 @@ function Failed({ why, onAgain }: { why: (GuidedState & { step: "failed" })["why
 
 /** The button that was pressed is gone with its page: the focus goes on to the new heading. */
 function useFocusOnChange(step: GuidedState["step"]): void {
-  const page = step === "before" || step === "failed" || step === "turn" || step === "done" ? step : "way";
+  const page = pages.has(step) ? step : "way";
   const before = useRef<string>(page);
   useEffect(() => {
     if (before.current === page) return;

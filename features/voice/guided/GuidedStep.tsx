@@ -8,14 +8,16 @@ import { colors, mixtures } from "@/features/ui/theme";
 import { useLayout } from "@/features/ui/useLayout";
 import { useHeard } from "../listening/useHeard";
 import type { LiveSound } from "../recorder/liveSound";
-import { enoughHoldS, holdNow, leastHoldS } from "./guidedHold";
+import { enoughHoldS, holdNow, leastHoldS } from "./hearing/guidedHold";
 import { GuidedLadder } from "./GuidedLadder";
 import type { GuidedEvent, GuidedState } from "./guidedSteps";
 import { StopSigns } from "./StopSigns";
 import { againIsSmaller, enoughWords, soFarWords, stepWords } from "./guidedWords";
 
+export type OnTheWay = Exclude<GuidedState, { step: "before" | "paused" | "done" | "failed" | "turn" }>;
+
 export interface GuidedStepProps {
-  state: Exclude<GuidedState, { step: "before" | "done" | "failed" | "turn" }>;
+  state: OnTheWay;
   live: LiveSound;
   onTell: (event: GuidedEvent) => void;
 }

@@ -1,4 +1,4 @@
-import type { TryOutcome } from "./guidedHold";
+import type { TryOutcome } from "./hearing/guidedHold";
 import { beforeGuided, guidedSteps, shownEnds, type GuidedEvent, type GuidedState } from "./guidedSteps";
 
 const start = (change: Partial<GuidedEvent & { kind: "start" }> = {}): GuidedEvent => ({
@@ -131,7 +131,10 @@ test("a microphone that is taken away keeps what was held, and says so where not
     step: "done",
     brokenOff: "unplugged",
   });
-  expect(guidedSteps(one, { kind: "interrupted", cause: "unplugged" })).toEqual({ step: "failed", why: "unplugged" });
+  expect(guidedSteps(one, { kind: "interrupted", cause: "unplugged" })).toMatchObject({
+    ...{ step: "paused", next: "low", cause: "unplugged" },
+    run: { held: [{ midi: 57 }] },
+  });
   expect(guidedSteps(one, { kind: "finish" })).toEqual({ step: "failed", why: "nothing" });
   expect(guidedSteps(begun(), { kind: "interrupted", cause: "taken" })).toEqual({ step: "failed", why: "taken" });
   expect(after([start(), { kind: "unavailable", why: "refused" }])).toEqual({ step: "failed", why: "refused" });
@@ -170,4 +173,49 @@ test("the tone can be heard again before singing, which is no try", () => {
   expect(guidedSteps(listening, { kind: "again" })).toEqual(begun());
   const humming = after([start({ home: null }), { kind: "opened" }]);
   expect(guidedSteps(humming, { kind: "again" })).toBe(humming);
+});
+
+test("what was held comes back after a reload: on down, on up from the turn, finished, or straight to the result", () => {
+  const one = after([start(), { kind: "opened" }, { kind: "toneEnded" }, { kind: "listened" }]);
+  const down = after([{ kind: "judged", outcome: held(57) }, { kind: "next" }], one);
+  const back = after([{ kind: "restored", kept: { step: "way", run: runOf(down), next: "low" } }]);
+  expect(back).toMatchObject({ step: "paused", cause: "reloaded" });
+  expect(runOf(after([{ kind: "resume" }, { kind: "opened" }], back))).toMatchObject({
+    end: "low",
+    target: 55,
+    tries: 0,
+  });
+  expect(after([{ kind: "resume" }], back).step).toBe("opening");
+
+  const turned = runOf(walk(begun(), 50, 70).state);
+  const atTurn = after([{ kind: "restored", kept: { step: "way", run: turned, next: "high" } }]);
+  expect(runOf(after([{ kind: "resume" }, { kind: "opened" }], atTurn))).toMatchObject({ end: "high", target: 59 });
+  const finished = after([{ kind: "finish" }], atTurn);
+  expect(finished).toMatchObject({ step: "done", findings: { lowMidi: 50, highMidi: 57 } });
+  if (finished.step !== "done") throw new Error("not done");
+  const { run, findings } = finished;
+  expect(after([{ kind: "restored", kept: { step: "done", run, findings } }])).toEqual({
+    ...finished,
+    brokenOff: null,
+  });
+  // A way that has begun meanwhile is not overrun.
+  expect(after([{ kind: "restored", kept: { step: "done", run, findings } }], begun())).toEqual(begun());
+});
+
+test("tries that did not hold are counted at their end, and the first note's are not", () => {
+  const { misses } = runOf(walk(begun(), 50, 70).state);
+  expect(misses).toEqual({ low: 2, high: 0 });
+  expect(runOf(walk(begun(), 51, 70).state).misses).toEqual({ low: 3, high: 0 });
+});
+
+test("the found notes are named by the singer's own tuning", () => {
+  const sharp = [57.4, 55.42, 53.38].reduce<GuidedState>(
+    (state, midi) =>
+      after(
+        [{ kind: "toneEnded" }, { kind: "listened" }, { kind: "judged", outcome: held(midi) }, { kind: "next" }],
+        state,
+      ),
+    begun(),
+  );
+  expect(after([{ kind: "finish" }], sharp)).toMatchObject({ step: "done", findings: { lowMidi: 53, highMidi: 57 } });
 });

@@ -1,4 +1,5 @@
-import type { HeldNote, TryOutcome } from "./guidedHold";
+import type { HeldNote, TryOutcome } from "./hearing/guidedHold";
+import { commonTuning } from "@/shared/voice/pitchSpread";
 import type { Interruption, Unavailable } from "../recorder/recorder";
 
 export type GuidedEnd = "low" | "high";
@@ -16,6 +17,8 @@ export interface GuidedRun {
   stride: 2 | 1;
   /** tries at this very note */
   tries: number;
+  /** tries beyond what was held that did not hold, at each end */
+  misses: Record<GuidedEnd, number>;
   held: HeldNote[];
 }
 
@@ -32,6 +35,8 @@ export interface GuidedFindings {
 
 export type GuidedState =
   | { step: "before" }
+  /** broken off before its end and not given up; `next` is the way that going on leads */
+  | { step: "paused"; run: GuidedRun; next: GuidedEnd; cause: Interruption }
   | { step: "opening"; run: GuidedRun }
   /** the reference tone sounds */
   | { step: "tone"; run: GuidedRun }
@@ -45,8 +50,16 @@ export type GuidedState =
   | { step: "done"; run: GuidedRun; findings: GuidedFindings; brokenOff: Interruption | null }
   | { step: "failed"; why: Unavailable | Interruption | "nothing" | "broken" };
 
+/** What is worth keeping of a way that was not finished, or not kept yet. */
+export type UnkeptRun =
+  { step: "way"; run: GuidedRun; next: GuidedEnd } | { step: "done"; run: GuidedRun; findings: GuidedFindings };
+
 export type GuidedEvent =
   | { kind: "start"; id: string; startedAt: string; home: number | null; under16: boolean }
+  /** what this tab held before it was loaded again */
+  | { kind: "restored"; kept: UnkeptRun }
+  /** on from where it broke off */
+  | { kind: "resume" }
   | { kind: "opened" }
   | { kind: "unavailable"; why: Unavailable }
   | { kind: "toneEnded" }
@@ -82,7 +95,9 @@ const bottomReserve = 2;
  */
 export function guidedSteps(state: GuidedState, event: GuidedEvent): GuidedState {
   if (event.kind === "leave") return beforeGuided;
-  if (state.step === "before" || state.step === "failed") return event.kind === "start" ? opening(event) : state;
+  if (state.step === "before" || state.step === "failed")
+    return event.kind === "start" ? opening(event) : back(state, event);
+  if (state.step === "paused") return fromPause(state, event);
   if (state.step === "done") {
     return event.kind === "found" ? { ...state, findings: settled({ ...state.findings, ...event.change }) } : state;
   }
@@ -91,7 +106,10 @@ export function guidedSteps(state: GuidedState, event: GuidedEvent): GuidedState
     case "unavailable":
       return state.step === "opening" ? { step: "failed", why: event.why } : state;
     case "interrupted":
-      return shownEnds(run).length > 0 ? done(run, event.cause) : { step: "failed", why: event.cause };
+      if (shownEnds(run).length > 0) return done(run, event.cause);
+      return run.held.length > 0
+        ? { step: "paused", run, next: run.end, cause: event.cause }
+        : { step: "failed", why: event.cause };
     case "broken":
       return shownEnds(run).length > 0 ? done(run) : { step: "failed", why: "broken" };
     case "finish":
@@ -103,7 +121,25 @@ export function guidedSteps(state: GuidedState, event: GuidedEvent): GuidedState
   }
 }
 
-type Running = Exclude<GuidedState, { step: "before" | "done" | "failed" }>;
+type Running = Exclude<GuidedState, { step: "before" | "paused" | "done" | "failed" }>;
+
+function back(state: GuidedState, event: GuidedEvent): GuidedState {
+  if (event.kind !== "restored" || state.step !== "before") return state;
+  const { kept } = event;
+  if (kept.step === "done") return { ...kept, brokenOff: null };
+  return { step: "paused", run: kept.run, next: kept.next, cause: "reloaded" };
+}
+
+function fromPause(state: GuidedState & { step: "paused" }, event: GuidedEvent): GuidedState {
+  const { run, next } = state;
+  if (event.kind === "finish") return done(run, state.cause);
+  if (event.kind !== "resume") return state;
+  return { step: "opening", run: next === run.end ? { ...run, tries: 0 } : upwards(run) };
+}
+
+function upwards(run: GuidedRun): GuidedRun {
+  return { ...run, end: "high", target: stepFrom(run, "high"), stride: 2, tries: 0 };
+}
 
 function atStep(state: Running, event: GuidedEvent): GuidedState {
   const { run } = state;
@@ -122,15 +158,14 @@ function atStep(state: Running, event: GuidedEvent): GuidedState {
     case "missed":
       return event.kind === "again" ? ask(retry(run)) : state;
     case "turn":
-      return event.kind === "up"
-        ? ask({ ...run, end: "high", target: stepFrom(run, "high"), stride: 2, tries: 0 })
-        : state;
+      return event.kind === "up" ? ask(upwards(run)) : state;
   }
 }
 
 function opening({ id, startedAt, home, under16 }: GuidedEvent & { kind: "start" }): GuidedState {
   const run: GuidedRun = {
     ...{ id, startedAt, home, under16, end: "low", target: home, stride: 2, tries: 0 },
+    misses: { low: 0, high: 0 },
     held: [],
   };
   return { step: "opening", run };
@@ -149,8 +184,9 @@ function afterTry(run: GuidedRun, outcome: TryOutcome): GuidedState {
   // A try in which nothing could be heard is no try of the voice.
   if (outcome.kind === "unheard") return { step: "missed", run, outcome };
   const tries = run.tries + 1;
-  const last = run.held.length > 0 && (run.under16 || (run.stride === 1 && tries >= 1));
-  return last ? endOfWay({ ...run, tries }) : { step: "missed", run: { ...run, tries }, outcome };
+  if (run.held.length === 0) return { step: "missed", run: { ...run, tries }, outcome };
+  const tried = { ...run, tries, misses: { ...run.misses, [run.end]: run.misses[run.end] + 1 } };
+  return run.under16 || run.stride === 1 ? endOfWay(tried) : { step: "missed", run: tried, outcome };
 }
 
 function retry(run: GuidedRun): GuidedRun {
@@ -173,9 +209,7 @@ function endOfWay(run: GuidedRun): GuidedState {
 /** One note alone is no range. */
 function done(run: GuidedRun, brokenOff: Interruption | null = null): GuidedState {
   if (shownEnds(run).length === 0) return { step: "failed", why: "nothing" };
-  const all = run.held.map(({ midi }) => midi);
-  const lowMidi = Math.round(Math.min(...all));
-  const highMidi = Math.round(Math.max(...all));
+  const { lowMidi, highMidi } = namedEnds(run.held);
   const home = run.home ?? lowMidi;
   const findings = settled({
     ...{ lowMidi, highMidi, warmedUp: null, effort: null },
@@ -183,6 +217,18 @@ function done(run: GuidedRun, brokenOff: Interruption | null = null): GuidedStat
     singHigh: Math.max(home, highMidi - topReserve),
   });
   return { step: "done", run, findings, brokenOff };
+}
+
+/** The lowest and highest held note, named by the singer's own tuning. */
+function namedEnds(held: readonly HeldNote[]): { lowMidi: number; highMidi: number } {
+  const offset = tuningOf(held) / 100;
+  const all = held.map(({ midi }) => Math.round(midi - offset));
+  return { lowMidi: Math.min(...all), highMidi: Math.max(...all) };
+}
+
+/** The offset of the held notes from equal temperament in cents: their circular mean, longer ones weighing more. */
+export function tuningOf(held: readonly HeldNote[]): number {
+  return commonTuning(held.map(({ midi, heldS }) => ({ start: 0, end: heldS, midi })));
 }
 
 /** Notes for a song lie among the notes that can be held, the lower one below the higher one. */
@@ -201,7 +247,7 @@ export function sideOf(end: GuidedEnd): -1 | 1 {
 }
 
 /** The farthest held note on this way; null before the first. */
-export function farthest({ held }: GuidedRun, end: GuidedEnd): HeldNote | null {
+export function farthest({ held }: Pick<GuidedRun, "held">, end: GuidedEnd): HeldNote | null {
   return held.reduce<HeldNote | null>(
     (best, note) => (best === null || sideOf(end) * (note.midi - best.midi) > 0 ? note : best),
     null,
@@ -209,7 +255,7 @@ export function farthest({ held }: GuidedRun, end: GuidedEnd): HeldNote | null {
 }
 
 /** Ends that were looked for and led beyond the note they started from. */
-export function shownEnds(run: GuidedRun): GuidedEnd[] {
+export function shownEnds(run: Pick<GuidedRun, "held" | "home">): GuidedEnd[] {
   const home = run.home;
   if (home === null) return [];
   return (["low", "high"] as const).filter((end) => {

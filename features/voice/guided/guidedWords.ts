@@ -1,7 +1,7 @@
 import type { FailureKind } from "../recorder/recorder";
 import { failureWords } from "../sing/failureWords";
 import { noteWord } from "../noteWords";
-import type { TryOutcome } from "./guidedHold";
+import type { TryOutcome } from "./hearing/guidedHold";
 import { farthest, type GuidedEnd, type GuidedRun, type GuidedState } from "./guidedSteps";
 
 export interface StepWords {
@@ -12,7 +12,9 @@ export interface StepWords {
 }
 
 /** What the singer reads at each step of the way. */
-export function stepWords(state: Exclude<GuidedState, { step: "before" | "done" | "failed" | "turn" }>): StepWords {
+export function stepWords(
+  state: Exclude<GuidedState, { step: "before" | "paused" | "done" | "failed" | "turn" }>,
+): StepWords {
   const { run } = state;
   const asked = run.target === null ? null : noteWord(run.target);
   switch (state.step) {
@@ -101,6 +103,8 @@ export function announcement(state: GuidedState): string {
     case "tone":
     case "judging":
       return "";
+    case "paused":
+      return "What you held is still here.";
     case "turn":
       return "The low end is done.";
     case "done":

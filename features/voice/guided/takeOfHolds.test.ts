@@ -1,4 +1,5 @@
 import { take } from "@/shared/contract/take";
+import { inTune } from "../takeOfHeard";
 import type { GuidedFindings, GuidedRun } from "./guidedSteps";
 import { takeOfHolds } from "./takeOfHolds";
 
@@ -12,6 +13,7 @@ const run = (midis: number[]): GuidedRun => ({
   target: null,
   stride: 2,
   tries: 0,
+  misses: { low: 3, high: 3 },
   held: midis.map((midi) => ({ midi, heldS: 1.5, steadinessCents: 9 })),
 });
 const findings: GuidedFindings = { lowMidi: 50, highMidi: 70, singLow: 52, singHigh: 67, warmedUp: true, effort: 2 };
@@ -23,12 +25,13 @@ it("keeps held notes and notes for singing apart, as the contract wants them", (
     kind: "hold",
     shows: "both",
     range: { lowMidi: 49.8, highMidi: 70.2 },
-    comfort: { lowMidi: 52, highMidi: 67 },
     effort: 2,
     warmedUp: true,
   });
   expect(kept.notes).toHaveLength(5);
-  expect(kept.certainty).toBeGreaterThan(0.7);
+  expect(inTune(kept.comfort, kept.tuningCents).lowMidi).toBeCloseTo(52, 6);
+  expect(inTune(kept.comfort, kept.tuningCents).highMidi).toBeCloseTo(67, 6);
+  expect(kept.reasons.join(" ")).toContain("Beyond your lowest note 3 more tries did not hold.");
 });
 
 it("says for which end it speaks where only one was looked for", () => {
@@ -38,4 +41,18 @@ it("says for which end it speaks where only one was looked for", () => {
 
 it("refuses a way that led nowhere", () => {
   expect(() => takeOfHolds(run([57]), findings, voiceId)).toThrow(RangeError);
+});
+
+it("takes the singer's own offset off the names, and keeps the notes as sung", () => {
+  const flat = [57, 53, 50, 62, 70].map((midi) => midi - 0.35);
+  const kept = takeOfHolds(run(flat), findings, voiceId);
+  expect(kept.tuningCents).toBeCloseTo(-35, 6);
+  expect(kept.range).toEqual({ lowMidi: 49.65, highMidi: 69.65 });
+  expect(inTune(kept.range, kept.tuningCents).lowMidi).toBeCloseTo(50, 6);
+  expect(inTune(kept.comfort, kept.tuningCents).highMidi).toBeCloseTo(67, 6);
+});
+
+it("says of whom it was, where the range will move", () => {
+  const kept = takeOfHolds({ ...run([57, 53, 50]), under16: true }, findings, voiceId);
+  expect(kept.reasons.at(-1)).toMatch(/range of that week/);
 });

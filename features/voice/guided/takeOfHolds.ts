@@ -1,14 +1,11 @@
 import type { Take } from "@/shared/contract/take";
 import { noteWord } from "../noteWords";
-import { shownEnds, type GuidedFindings, type GuidedRun } from "./guidedSteps";
-
-/** Each end was held for itself, to a known note: a guided hold starts from this certainty, and more held time adds to it. */
-const leastCertainty = 0.7;
-const mostCertainty = 0.95;
+import { holdsEvidence } from "./holdsEvidence";
+import { shownEnds, type GuidedEnd, type GuidedFindings, type GuidedRun } from "./guidedSteps";
 
 /**
  * A guided way as it is kept: the notes one after the other, what can be held as range, what the singer would use in a
- * song as comfort. Reference tones fix the tuning, so that notes are named as they stand.
+ * song as comfort. All are kept as sung, with the singer's own offset beside them, as in a phrase.
  *
  * @throws RangeError if the way showed no end of the voice
  */
@@ -19,6 +16,8 @@ export function takeOfHolds(run: GuidedRun, findings: GuidedFindings, voiceId: s
   const { notes, heldS } = laidOut(run);
   const all = run.held.map(({ midi }) => midi);
   const range = { lowMidi: Math.min(...all), highMidi: Math.max(...all) };
+  const { tuningCents, certainty } = holdsEvidence(run);
+  const asSung = (named: number) => within(named + tuningCents / 100);
   const within = (midi: number) => Math.max(range.lowMidi, Math.min(range.highMidi, midi));
   return {
     id: run.id,
@@ -30,16 +29,24 @@ export function takeOfHolds(run: GuidedRun, findings: GuidedFindings, voiceId: s
     effort: findings.effort,
     durationS: Math.min(600, heldS),
     range,
-    comfort: { lowMidi: within(findings.singLow), highMidi: within(findings.singHigh) },
+    comfort: { lowMidi: asSung(findings.singLow), highMidi: asSung(findings.singHigh) },
     estimate: range,
-    tuningCents: 0,
-    certainty: leastCertainty + (mostCertainty - leastCertainty) * (heldS / (heldS + 6)),
+    tuningCents,
+    certainty,
     reasons: [
-      `You held ${notes.length} notes one by one.`,
+      `You held ${notes.length} notes one by one, ${heldS.toFixed(1)} seconds in all.`,
+      ...ends.map((end) => endWords(end, run.misses[end])),
       `${noteWord(findings.singLow)} to ${noteWord(findings.singHigh)} are the notes you would use in a song.`,
+      ...(run.under16 ? ["You are under 16: this was the range of that week, and it moves."] : []),
     ],
     notes,
   };
+}
+
+function endWords(end: GuidedEnd, misses: number): string {
+  const name = end === "low" ? "lowest" : "highest";
+  if (misses === 0) return `You called your ${name} note enough; nothing beyond it was tried.`;
+  return `Beyond your ${name} note ${misses === 1 ? "one more try" : `${misses} more tries`} did not hold.`;
 }
 
 function laidOut({ held }: GuidedRun): { notes: Take["notes"]; heldS: number } {

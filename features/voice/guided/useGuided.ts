@@ -1,5 +1,5 @@
-import { useEffect, useReducer, useRef, useState, type Dispatch } from "react";
-import { createGuidedSession, type GuidedSession } from "./guidedSession";
+import { useCallback, useEffect, useReducer, useRef, useState } from "react";
+import { createGuidedSession, type GuidedSession } from "./hearing/guidedSession";
 import {
   beforeGuided,
   farthest,
@@ -9,6 +9,7 @@ import {
   type GuidedRun,
   type GuidedState,
 } from "./guidedSteps";
+import { dropUnkeptRun, readUnkeptRun, saveUnkeptRun } from "./unkeptRun";
 import { createLiveSound, type LiveSound } from "../recorder/liveSound";
 
 /** Long enough to read "held" and to breathe in. */
@@ -17,7 +18,7 @@ const breathMs = 1100;
 export interface Guided {
   state: GuidedState;
   live: LiveSound;
-  tell: Dispatch<GuidedEvent>;
+  tell: (event: GuidedEvent) => void;
 }
 
 /** Runs tone, microphone and worker as the machine's steps ask. */
@@ -29,8 +30,12 @@ export function useGuided(): Guided {
   useEffect(() => {
     const own = createGuidedSession(tell, live);
     session.current = own;
+    const kept = readUnkeptRun(Date.now());
+    if (kept) tell({ kind: "restored", kept });
     return () => own.close();
   }, [live]);
+
+  useEffect(() => saveUnkeptRun(state), [state]);
 
   // One effect a step: a try that is asked for again is a new state object, and runs again.
   useEffect(() => {
@@ -53,13 +58,18 @@ export function useGuided(): Guided {
         return () => clearTimeout(timer);
       }
       case "before":
+      case "paused":
       case "done":
       case "failed":
         own?.close();
     }
   }, [state]);
 
-  return { state, live, tell };
+  const tellAndForget = useCallback((event: GuidedEvent) => {
+    if (event.kind === "leave") dropUnkeptRun();
+    tell(event);
+  }, []);
+  return { state, live, tell: tellAndForget };
 }
 
 function askedOf(run: GuidedRun) {

@@ -1,14 +1,12 @@
 import { newId } from "@/features/api/newId";
+import { createEar } from "./ear";
 import { hear, silence, type LiveSound } from "./liveSound";
-import { MicrophoneUnavailable, openMicrophone, type Microphone } from "./microphone";
 import { openTakeWorker } from "./openTakeWorker";
 import type { HeardTake, RecorderEvent } from "./recorder";
 import { FileRefused, readSoundFile } from "./soundFile";
 import type { FromTakeWorker, TakePart, ToTakeWorker } from "./takeProtocol";
 import { beginUnkept, markTakeOfThisTab, type CutOffTake } from "./unkeptTake";
 
-/** No block for so long means that the sound has stopped without a word. */
-const stallMs = 3000;
 /** The page learns the time five times a second; the trail has its own, faster way. */
 const ticksPerS = 5;
 
@@ -30,9 +28,8 @@ export interface Capture {
 /** Joins the microphone and the worker, and tells the recorder what happens. */
 export function createCapture(emit: (event: RecorderEvent) => void, live: LiveSound): Capture {
   let worker: Worker | null = null;
-  let microphone: Microphone | null = null;
-  let watchdog: ReturnType<typeof setInterval> | null = null;
-  let round = 0;
+  const ear = createEar(emit, live);
+  let reading = 0;
   let tick = 0;
 
   const tell = (message: ToTakeWorker, transfer: Transferable[] = []) => {
@@ -51,7 +48,7 @@ export function createCapture(emit: (event: RecorderEvent) => void, live: LiveSo
   const receive = (message: FromTakeWorker) => {
     if (message.kind === "judged" || message.kind === "listened") emit(message);
     else if (message.kind === "broken") emit({ kind: "broken" });
-    else if (microphone) {
+    else if (ear.microphone) {
       hear(live, message, performance.now());
       const now = Math.floor(message.seconds * ticksPerS);
       if (now !== tick) emit({ kind: "heard", seconds: message.seconds });
@@ -59,11 +56,8 @@ export function createCapture(emit: (event: RecorderEvent) => void, live: LiveSo
     }
   };
   const release = () => {
-    round += 1;
-    if (watchdog) clearInterval(watchdog);
-    watchdog = null;
-    microphone?.close();
-    microphone = null;
+    reading += 1;
+    ear.release();
   };
 
   return {
@@ -72,57 +66,40 @@ export function createCapture(emit: (event: RecorderEvent) => void, live: LiveSo
       release();
       silence(live);
       tick = 0;
-      const mine = round;
-      try {
-        const opened = await openMicrophone((cause) => emit({ kind: "interrupted", cause }));
-        if (mine !== round) {
-          opened.close();
-          return;
-        }
-        microphone = opened;
-        if (counted) await opened.countIn((left) => mine === round && emit({ kind: "beat", left }));
-        if (mine !== round) return;
-        const take = { id: newId(), sungAt: new Date().toISOString() };
-        markTakeOfThisTab(take.id);
-        void beginUnkept({ ...take, sampleRate: opened.sampleRate }).catch(() => undefined);
-        const { port1, port2 } = new MessageChannel();
-        tell({ kind: "begin", sampleRate: opened.sampleRate, sound: port2, keepAs: take.id }, [port2]);
-        opened.listen(port1);
-        live.atMs = performance.now();
-        watchdog = setInterval(() => {
-          if (performance.now() - live.atMs > stallMs) emit({ kind: "interrupted", cause: "stalled" });
-        }, 1000);
-        emit({ kind: "opened", ...take, processed: opened.processed });
-      } catch (fault) {
-        if (mine !== round) return;
-        emit({ kind: "unavailable", why: fault instanceof MicrophoneUnavailable ? fault.why : "unsupported" });
-      }
+      const opened = await ear.open();
+      const here = () => opened !== null && ear.microphone === opened;
+      if (opened && counted) await opened.countIn((left) => here() && emit({ kind: "beat", left }));
+      if (!opened || !here()) return;
+      const take = { id: newId(), sungAt: new Date().toISOString() };
+      markTakeOfThisTab(take.id);
+      void beginUnkept({ ...take, sampleRate: opened.sampleRate }).catch(() => undefined);
+      const { port1, port2 } = new MessageChannel();
+      tell({ kind: "begin", sampleRate: opened.sampleRate, sound: port2, keepAs: take.id }, [port2]);
+      ear.listen(port1);
+      emit({ kind: "opened", ...take, processed: opened.processed });
     },
     async stop() {
-      const open = microphone;
-      if (watchdog) clearInterval(watchdog);
-      const endIsComing = (await open?.finish()) ?? false;
-      if (open !== microphone) return;
-      microphone = null;
+      const endIsComing = await ear.finish();
+      if (endIsComing === null) return;
       emit({ kind: "flushed" });
       tell({ kind: "judge", endIsComing });
     },
     async read(file) {
       release();
-      const mine = round;
+      const mine = reading;
       try {
         const { pcm, sampleRate } = await readSoundFile(
           file,
-          (share) => mine === round && emit({ kind: "bytes", share }),
+          (share) => mine === reading && emit({ kind: "bytes", share }),
         );
-        if (mine !== round) return;
+        if (mine !== reading) return;
         const sungAt = new Date(Math.min(Date.now(), file.lastModified)).toISOString();
         const take = { id: newId(), sungAt };
         markTakeOfThisTab(take.id);
         emit({ kind: "decoded", ...take, seconds: pcm.length / sampleRate });
         tell({ kind: "judgeKept", sampleRate, pcm, part: null }, [pcm.buffer]);
       } catch (fault) {
-        if (mine !== round) return;
+        if (mine !== reading) return;
         if (fault instanceof FileRefused) emit({ kind: "unusable", why: fault.why, file: fault.kind });
         else emit({ kind: "broken" });
       }

@@ -22,6 +22,11 @@ const causes: Record<Interruption, string> = {
   reloaded: "The page was loaded again",
 };
 
+/** "A call or another program took the microphone" */
+export function interruptionWords(stoppedBy: Interruption): string {
+  return causes[stoppedBy];
+}
+
 /** "A call or another program took the microphone at 4 s." */
 export function causeWords(stoppedBy: Interruption, seconds: number): string {
   return `${causes[stoppedBy]} at ${Math.floor(seconds)} s.`;

@@ -1,15 +1,13 @@
 import { enoughHoldS, fellSilent, holdNow, longestTryS, readTry, type Asked } from "./guidedHold";
 import type { FromGuidedWorker, ToGuidedWorker } from "./guidedProtocol";
-import type { GuidedEvent } from "./guidedSteps";
+import type { GuidedEvent } from "../guidedSteps";
 import { openGuidedWorker } from "./openGuidedWorker";
-import { hear, silence, type LiveSound } from "../recorder/liveSound";
-import { MicrophoneUnavailable, openMicrophone, type Microphone } from "../recorder/microphone";
+import { createEar } from "../../recorder/ear";
+import { hear, silence, type LiveSound } from "../../recorder/liveSound";
 import { createReferenceTone, type ReferenceTone } from "./referenceTone";
 
 /** The room gives the tone back for a moment after it has ended. */
 const roomMs = 180;
-/** No block for so long means that the sound has stopped without a word. */
-const stallMs = 3000;
 
 export interface GuidedSession {
   open(): Promise<void>;
@@ -21,10 +19,9 @@ export interface GuidedSession {
 
 /** Joins tone, microphone and worker, and tells the machine what happens. One microphone for the whole way. */
 export function createGuidedSession(emit: (event: GuidedEvent) => void, live: LiveSound): GuidedSession {
+  const ear = createEar(emit, live);
   let tone: ReferenceTone | null = null;
-  let microphone: Microphone | null = null;
   let worker: Worker | null = null;
-  let watch: ReturnType<typeof setInterval> | null = null;
   let asked: Asked | null = null;
   let listening = false;
   let round = 0;
@@ -32,8 +29,7 @@ export function createGuidedSession(emit: (event: GuidedEvent) => void, live: Li
   const tell = (message: ToGuidedWorker, transfer: Transferable[] = []) => worker?.postMessage(message, transfer);
   const endListening = () => {
     listening = false;
-    if (watch) clearInterval(watch);
-    watch = null;
+    ear.rest();
   };
   const receive = (message: FromGuidedWorker) => {
     if (message.kind === "broken") emit({ kind: "broken" });
@@ -52,8 +48,7 @@ export function createGuidedSession(emit: (event: GuidedEvent) => void, live: Li
     endListening();
     tone?.close();
     tone = null;
-    microphone?.close();
-    microphone = null;
+    ear.release();
     worker?.terminate();
     worker = null;
   };
@@ -61,24 +56,11 @@ export function createGuidedSession(emit: (event: GuidedEvent) => void, live: Li
   return {
     async open() {
       release();
-      const mine = round;
       tone = createReferenceTone();
       worker = openGuidedWorker();
       worker.onmessage = ({ data }: MessageEvent<FromGuidedWorker>) => receive(data);
       worker.onerror = () => emit({ kind: "broken" });
-      try {
-        const opened = await openMicrophone((cause) => emit({ kind: "interrupted", cause }));
-        if (mine !== round) {
-          opened.close();
-          return;
-        }
-        microphone = opened;
-        emit({ kind: "opened" });
-      } catch (fault) {
-        if (mine !== round) return;
-        release();
-        emit({ kind: "unavailable", why: fault instanceof MicrophoneUnavailable ? fault.why : "unsupported" });
-      }
+      if (await ear.open()) emit({ kind: "opened" });
     },
     async sound(midi) {
       const mine = round;
@@ -89,16 +71,13 @@ export function createGuidedSession(emit: (event: GuidedEvent) => void, live: Li
       if (mine === round) emit({ kind: "toneEnded" });
     },
     listen() {
+      const { microphone } = ear;
       if (!microphone) return;
       silence(live);
       const { port1, port2 } = new MessageChannel();
       tell({ kind: "begin", sampleRate: microphone.sampleRate, sound: port2 }, [port2]);
-      microphone.listen(port1);
-      live.atMs = performance.now();
+      ear.listen(port1);
       listening = true;
-      watch = setInterval(() => {
-        if (performance.now() - live.atMs > stallMs) emit({ kind: "interrupted", cause: "stalled" });
-      }, 500);
     },
     judge(wanted) {
       endListening();

@@ -2,7 +2,7 @@ import type { LiveFrame } from "@/shared/voice/liveTracker";
 import type { TakeReport } from "@/shared/voice/takeReport";
 import { longestTryS } from "./guidedHold";
 import type { FromGuidedWorker, ToGuidedWorker } from "./guidedProtocol";
-import type { TakeSound } from "../recorder/takeProtocol";
+import type { TakeSound } from "../../recorder/takeProtocol";
 
 export interface GuidedTools {
   createTracker(sampleRate: number): { push(pcm: Float32Array): LiveFrame[] };

@@ -1,7 +1,10 @@
 import { signInRequest, signUpRequest } from "@/shared/contract/account";
 import { decision } from "@/shared/contract/decision";
 import { ownInstrument } from "@/shared/contract/instrument";
-import { song } from "@/shared/contract/song";
+import { pageOfSongs, tagsOfSongs } from "@/features/api/deviceSongs";
+import type { SongQuestion } from "@/features/api/songQuestion";
+import { song, type Song } from "@/shared/contract/song";
+import type { SongVersion } from "@/shared/contract/songVersion";
 import { take } from "@/shared/contract/take";
 import { voice } from "@/shared/contract/voice";
 
@@ -43,6 +46,8 @@ export class FakeApi {
     decisions: new Map(),
     instruments: new Map(),
   };
+  /** Earlier states of songs, by their id, newest first. Each change keeps the state before: nobody pauses here. */
+  readonly versions = new Map<string, SongVersion[]>();
   /** Answers in the server's place, or "down" for a network that fails. */
   intercept: (method: string, path: string) => Answer | "down" | undefined = () => undefined;
 
@@ -147,15 +152,19 @@ export class FakeApi {
     const token = (init.headers as Record<string, string>)["Authorization"]?.replace("Bearer ", "");
     const owner = token === undefined ? undefined : this.#tokens.get(token);
     if (owner === undefined) return problem(401, "not-signed-in", "Sign in first.");
-    const [, name, id] = path.split("/") as [string, Name, string | undefined];
+    const [address = "", query = ""] = path.split("?");
+    const [, name, id, part, partId] = address.split("/") as [string, Name, ...(string | undefined)[]];
     const table = this.tables[name];
+    if (name === "songs" && (id === "page" || id === "tags")) return this.#list(owner, id, new URLSearchParams(query));
     if (id === undefined)
       return { status: 200, body: [...table.values()].filter((row) => row.owner === owner).map((row) => row.item) };
     const row = table.get(id);
     if (row ? row.owner !== owner : method === "GET") return problem(404, "not-found", "This is not on your shelf.");
+    if (part === "versions") return this.#versions(id, partId);
     if (method === "GET") return { status: 200, body: row?.item };
     if (method === "DELETE") {
       table.delete(id);
+      this.versions.delete(id);
       return { status: 204 };
     }
     const parsed = schemas[name].safeParse(body);
@@ -171,7 +180,50 @@ export class FakeApi {
       typeof item[key] === "string" && this.tables[target].get(item[key])?.owner !== owner;
     if (missing("voices", "voiceId") || missing("songs", "songId"))
       return problem(422, "unknown-reference", "This belongs to something you do not have.");
+    if (name === "songs") return this.#putSong(owner, item as unknown as Song, row);
     table.set(id, { owner, item });
     return { status: row ? 200 : 201, body: item };
+  }
+
+  #putSong(owner: string, sent: Song, row: Row | undefined): Answer {
+    const before = row?.item as unknown as Song | undefined;
+    const alike = (a: Song, b: Song) => JSON.stringify({ ...a, revision: 0 }) === JSON.stringify({ ...b, revision: 0 });
+    if (before && alike(song.parse(before), sent)) return { status: 200, body: before };
+    if (before && before.revision !== sent.revision)
+      return problem(409, "changed-elsewhere", "This song was changed in another place meanwhile.");
+    if (before) {
+      const by = this.#people.find(({ id }) => id === owner)?.email ?? "";
+      const version = { id: `20000000-0000-4000-8000-${String(++this.#serial).padStart(12, "0")}`, by, song: before };
+      const savedAt = new Date().toISOString();
+      this.versions.set(sent.id, [{ ...version, savedAt }, ...(this.versions.get(sent.id) ?? [])]);
+    }
+    const item = { ...sent, revision: before ? before.revision + 1 : 1 };
+    this.tables.songs.set(sent.id, { owner, item });
+    return { status: before ? 200 : 201, body: item };
+  }
+
+  #versions(songId: string, versionId: string | undefined): Answer {
+    const versions = this.versions.get(songId) ?? [];
+    if (versionId === undefined)
+      return { status: 200, body: versions.map(({ song: then, ...entry }) => ({ ...entry, title: then.title })) };
+    const version = versions.find(({ id }) => id === versionId);
+    return version ? { status: 200, body: version } : problem(404, "not-found", "There is no such version.");
+  }
+
+  #list(owner: string, what: "page" | "tags", query: URLSearchParams): Answer {
+    const songs = [...this.tables.songs.values()]
+      .filter((row) => row.owner === owner)
+      .map((row) => row.item as unknown as Song);
+    if (what === "tags") return { status: 200, body: tagsOfSongs(songs) };
+    const archived = query.get("archived") ?? "false";
+    const question: SongQuestion = {
+      q: query.get("q") ?? "",
+      tag: query.get("tag"),
+      archived: archived === "all" ? "all" : archived === "true",
+      sort: (query.get("sort") ?? "title") as NonNullable<SongQuestion["sort"]>,
+      limit: Number(query.get("limit") ?? 50),
+      cursor: query.get("cursor"),
+    };
+    return { status: 200, body: pageOfSongs(songs, question) };
   }
 }

@@ -15,29 +15,55 @@ interface Request<T> {
   result: T;
 }
 
-async function open<T>(work: (items: Map<string, unknown>) => T): Promise<T> {
-  if (refused) throw refused;
-  return work(kept);
+interface Range {
+  lower: string;
+  upper: string;
+}
+
+interface Store {
+  get(key: string): Request<unknown>;
+  getAll(range: Range): Request<unknown[]>;
+  put(value: unknown, key: string): void;
+  delete(key: string): void;
+  transaction: Request<null> & { abort(): void };
+}
+
+// jsdom has no IndexedDB.
+Object.assign(globalThis, { IDBKeyRange: { bound: (lower: string, upper: string): Range => ({ lower, upper }) } });
+
+let queue: Promise<unknown> = Promise.resolve();
+
+/** As IndexedDB has it: one transaction after the other, and an aborted one leaves no trace. */
+async function transact<T>(work: (store: Store) => T): Promise<Awaited<T>> {
+  const turn = queue.then(() => {
+    if (refused) throw refused;
+    const before = [...kept];
+    const undo = () => {
+      kept.clear();
+      for (const [key, value] of before) kept.set(key, value);
+    };
+    return work({
+      get: (key) => ({ result: copy(kept.get(key)) }),
+      getAll: ({ lower, upper }) => ({
+        result: [...kept].filter(([key]) => key >= lower && key <= upper).map(([, value]) => copy(value)),
+      }),
+      put: (value, key) => void kept.set(key, copy(value)),
+      delete: (key) => void kept.delete(key),
+      transaction: { result: null, abort: undo },
+    });
+  });
+  queue = turn.then(
+    () => undefined,
+    () => undefined,
+  );
+  return await turn;
 }
 
 /** The part of idb-keyval that the device shelf uses. */
 export const memoryIdb = {
   createStore:
     () =>
-    <T>(
-      _mode: string,
-      work: (store: { get(key: string): Request<unknown>; delete(key: string): void; transaction: Request<null> }) => T,
-    ) =>
-      open((items) =>
-        work({
-          get: (key) => ({ result: copy(items.get(key)) }),
-          delete: (key) => void items.delete(key),
-          transaction: { result: null },
-        }),
-      ),
+    <T>(_mode: string, work: (store: Store) => T) =>
+      transact(work),
   promisifyRequest: async <T>(request: Request<T>) => request.result,
-  get: (key: string) => open((items) => copy(items.get(key))),
-  set: (key: string, value: unknown) => open((items) => void items.set(key, copy(value))),
-  delMany: (keys: string[]) => open((items) => keys.forEach((key) => items.delete(key))),
-  entries: () => open((items) => [...items].map(([key, value]) => [key, copy(value)])),
 };

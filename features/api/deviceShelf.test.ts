@@ -62,10 +62,10 @@ it("removes takes with their voice and decisions with their song", async () => {
 it("does not let go of an item that was changed since it was read", async () => {
   const song = aSong();
   await deviceShelf.put("songs", song);
-  await deviceShelf.put("songs", { ...song, title: "Changed in another tab" });
+  const changed = await deviceShelf.put("songs", { ...song, title: "Changed in another tab" });
   expect(await deviceShelf.release("songs", song)).toBe(false);
   expect(await deviceShelf.list("songs")).toHaveLength(1);
-  expect(await deviceShelf.release("songs", { ...song, title: "Changed in another tab" })).toBe(true);
+  expect(await deviceShelf.release("songs", changed)).toBe(true);
   expect(await deviceShelf.list("songs")).toEqual([]);
 });
 
@@ -74,6 +74,7 @@ it("knows a demonstration song as it came from one that was worked on", async ()
   await deviceShelf.put("songs", seeded);
   expect(await deviceShelf.isAsSeeded(seeded)).toBe(true);
   expect(await deviceShelf.isAsSeeded({ ...seeded, tempo: 63 })).toBe(false);
+  expect(await deviceShelf.isAsSeeded({ ...seeded, playedAt: "2026-03-06T18:30:00.000Z", revision: 2 })).toBe(true);
   const copy = aSong({ demo: "ferry", title: "My ferry" });
   await deviceShelf.put("songs", copy);
   expect(await deviceShelf.isAsSeeded(copy)).toBe(false);

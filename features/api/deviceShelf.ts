@@ -1,7 +1,10 @@
+import type { SongVersion } from "@/shared/contract/songVersion";
 import { ApiError } from "./apiError";
-import { indexedDbStorage, type DeviceStorage } from "./deviceStorage";
-import { sameData } from "./sameData";
+import { deviceHistory } from "./deviceHistory";
+import { indexedDbStorage, type DeviceItems, type DeviceStorage } from "./deviceStorage";
 import type { Collection, Items, Shelf } from "./items";
+import { sameData } from "./sameData";
+import { changedElsewhere, completeSong, sameContent, sameSong } from "./songRevision";
 
 /** The shelf of a visitor, plus what moving it needs. */
 export interface DeviceShelf extends Shelf {
@@ -9,67 +12,118 @@ export interface DeviceShelf extends Shelf {
   release<C extends Collection>(name: C, item: Items[C]): Promise<boolean>;
   /** A copy of the demonstration exactly as it was first put here. */
   isAsSeeded(song: Items["songs"]): Promise<boolean>;
+  /** Earlier states of a song, newest first. */
+  versions(songId: string): Promise<SongVersion[]>;
 }
+
+type Readable = Pick<DeviceItems, "get" | "list">;
 
 const keyOf = (name: string, id: string) => `${name}/${id}`;
 const unknownReference = (what: string) =>
   new ApiError(422, "unknown-reference", `The ${what} this belongs to is not on your shelf any more.`);
 
-/** A song without what differs from copy to copy. */
-const contentOf = (song: Items["songs"]) => ({ ...song, id: null, createdAt: null });
+/** An item as it is today, whenever it was kept. */
+const asToday = <C extends Collection>(name: C, kept: unknown) =>
+  (name === "songs" ? completeSong(kept) : kept) as Items[C];
 
-/** Keeps a visitor's belongings on this device. Refuses the same references as the server. */
+const listIn = async <C extends Collection>(items: Readable, name: C): Promise<Items[C][]> =>
+  (await items.list(keyOf(name, ""))).map((kept) => asToday(name, kept));
+
+/** A song without what differs from copy to copy; that it was played makes it no work of one's own. */
+const contentOf = (song: Items["songs"]) => ({
+  ...completeSong(song),
+  id: null,
+  createdAt: null,
+  playedAt: null,
+  revision: null,
+});
+
+async function checkReferences(items: Readable, name: Collection, item: Items[Collection]): Promise<void> {
+  const has = async (parent: Collection, id: string) => (await items.get(keyOf(parent, id))) !== undefined;
+  if (name === "takes" && !(await has("voices", (item as Items["takes"]).voiceId))) throw unknownReference("voice");
+  if (name !== "decisions") return;
+  const { songId, voiceId } = item as Items["decisions"];
+  if (!(await has("songs", songId))) throw unknownReference("song");
+  if (voiceId !== null && !(await has("voices", voiceId))) throw unknownReference("voice");
+}
+
+/** The first copy of a demonstration song is the one the product put here; later ones may be a person's work. */
+async function rememberSeed(items: DeviceItems, song: Items["songs"]): Promise<void> {
+  if (song.demo === null || (await items.get(keyOf("seeded", song.demo))) !== undefined) return;
+  items.set(keyOf("seeded", song.demo), contentOf(song));
+}
+
+/** Counts the revision up, keeps the state before, and refuses a change of anything but the kept revision. */
+async function putSong(items: DeviceItems, song: Items["songs"], version: boolean): Promise<Items["songs"]> {
+  const found = await items.get(keyOf("songs", song.id));
+  if (found === undefined) {
+    await rememberSeed(items, song);
+    return setSong(items, { ...song, revision: 1 });
+  }
+  const kept = completeSong(found);
+  if (sameSong(kept, song)) return kept;
+  if (song.revision !== kept.revision) throw changedElsewhere();
+  if (!sameContent(kept, song)) await deviceHistory.keep(items, kept, version);
+  return setSong(items, { ...song, revision: kept.revision + 1 });
+}
+
+function setSong(items: DeviceItems, song: Items["songs"]): Items["songs"] {
+  items.set(keyOf("songs", song.id), song);
+  return song;
+}
+
+/** Takes an item and what goes with it away. */
+async function takeAway(items: DeviceItems, name: Collection, id: string): Promise<void> {
+  items.delete(keyOf(name, id));
+  if (name === "songs") {
+    deviceHistory.forget(items, id);
+    for (const decision of await listIn(items, "decisions"))
+      if (decision.songId === id) items.delete(keyOf("decisions", decision.id));
+  }
+  if (name === "voices") {
+    for (const take of await listIn(items, "takes")) if (take.voiceId === id) items.delete(keyOf("takes", take.id));
+    for (const decision of await listIn(items, "decisions"))
+      if (decision.voiceId === id) items.set(keyOf("decisions", decision.id), { ...decision, voiceId: null });
+  }
+}
+
+/** Keeps a visitor's belongings on this device. Refuses the same references and the same late changes as the server. */
 function createDeviceShelf(storage: DeviceStorage): DeviceShelf {
-  const list = async <C extends Collection>(name: C): Promise<Items[C][]> =>
-    (await storage.entries()).filter(([key]) => key.startsWith(`${name}/`)).map(([, item]) => item as Items[C]);
-
-  const has = async (name: Collection, id: string) => (await storage.get(keyOf(name, id))) !== undefined;
-
-  async function checkReferences(name: Collection, item: Items[Collection]): Promise<void> {
-    if (name === "takes" && !(await has("voices", (item as Items["takes"]).voiceId))) throw unknownReference("voice");
-    if (name !== "decisions") return;
-    const { songId, voiceId } = item as Items["decisions"];
-    if (!(await has("songs", songId))) throw unknownReference("song");
-    if (voiceId !== null && !(await has("voices", voiceId))) throw unknownReference("voice");
-  }
-
-  /** The first copy of a demonstration song is the one the product put here; later ones may be a person's work. */
-  async function rememberSeed(song: Items["songs"]): Promise<void> {
-    if (song.demo === null || (await storage.get(keyOf("seeded", song.demo))) !== undefined) return;
-    await storage.set(keyOf("seeded", song.demo), contentOf(song));
-  }
-
   return {
-    list,
-    async get<C extends Collection>(name: C, id: string) {
-      const item = await storage.get(keyOf(name, id));
-      if (item === undefined) throw ApiError.notFound();
-      return item as Items[C];
-    },
-    async put(name, item) {
-      await checkReferences(name, item);
-      if (name === "songs") await rememberSeed(item as Items["songs"]);
-      await storage.set(keyOf(name, item.id), item);
-      return item;
-    },
-    async remove(name, id) {
-      const gone = [keyOf(name, id)];
-      if (name === "songs") {
-        for (const decision of await list("decisions"))
-          if (decision.songId === id) gone.push(keyOf("decisions", decision.id));
-      }
-      if (name === "voices") {
-        for (const take of await list("takes")) if (take.voiceId === id) gone.push(keyOf("takes", take.id));
-        for (const decision of await list("decisions"))
-          if (decision.voiceId === id)
-            await storage.set(keyOf("decisions", decision.id), { ...decision, voiceId: null });
-      }
-      await storage.delete(gone);
-    },
-    release: (name, item) => storage.deleteIf(keyOf(name, item.id), (kept) => sameData(kept, item)),
+    list: (name) => storage.read((items) => listIn(items, name)),
+    get: (name, id) =>
+      storage.read(async (items) => {
+        const item = await items.get(keyOf(name, id));
+        if (item === undefined) throw ApiError.notFound();
+        return asToday(name, item);
+      }),
+    put: <C extends Collection>(name: C, item: Items[C], { version = false } = {}) =>
+      storage.change(async (items) => {
+        await checkReferences(items, name, item);
+        if (name === "songs") return (await putSong(items, item as Items["songs"], version)) as Items[C];
+        items.set(keyOf(name, item.id), item);
+        return item;
+      }),
+    remove: (name, id) => storage.change((items) => takeAway(items, name, id)),
+    release: (name, item) =>
+      storage.change(async (items) => {
+        const kept = await items.get(keyOf(name, item.id));
+        if (kept === undefined || !sameData(asToday(name, kept), item)) return false;
+        items.delete(keyOf(name, item.id));
+        if (name === "songs") deviceHistory.forget(items, item.id);
+        return true;
+      }),
     async isAsSeeded(song) {
-      return song.demo !== null && sameData(await storage.get(keyOf("seeded", song.demo)), contentOf(song));
+      const { demo } = song;
+      if (demo === null) return false;
+      const seeded = await storage.read((items) => items.get(keyOf("seeded", demo)));
+      return seeded !== undefined && sameData(contentOf(seeded as Items["songs"]), contentOf(song));
     },
+    versions: (songId) =>
+      storage.read(async (items) => {
+        if ((await items.get(keyOf("songs", songId))) === undefined) throw ApiError.notFound();
+        return deviceHistory.read(items, songId);
+      }),
   };
 }
 

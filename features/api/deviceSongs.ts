@@ -4,7 +4,7 @@ import { firstWords, foldText, searchText, searchWords } from "@/shared/songs/so
 import { tuneSpan } from "@/shared/songs/tuneSpan";
 import { ApiError } from "./apiError";
 import { deviceShelf } from "./deviceShelf";
-import type { SongQuestion } from "./songPages";
+import type { SongQuestion } from "./songQuestion";
 
 /** A listing with what it is found and sorted by. */
 interface Listed {
@@ -58,24 +58,21 @@ function readCursor(cursor: string, sort: SongOrder): Place {
   throw new ApiError(422, "invalid", "This list has changed. Begin at its top again.");
 }
 
-async function all(): Promise<Listed[]> {
-  const songs = (await deviceShelf.list("songs")).map(listed);
-  known = new Map(songs.map((entry) => [entry.song.id, entry]));
-  return songs;
+function listAll(songs: readonly Song[]): Listed[] {
+  const entries = songs.map(listed);
+  known = new Map(entries.map((entry) => [entry.song.id, entry]));
+  return entries;
 }
 
-async function page({
-  q = "",
-  tag,
-  archived = false,
-  sort = "title",
-  limit = 50,
-  cursor,
-}: SongQuestion): Promise<SongPage> {
+/** One page of these songs, found and sorted as the server does it. */
+export function pageOfSongs(
+  songs: readonly Song[],
+  { q = "", tag, archived = false, sort = "title", limit = 50, cursor }: SongQuestion,
+): SongPage {
   const words = searchWords(q);
   const wanted = tag ? tagKey(tag) : null;
   const order = inOrder(sort);
-  const found = (await all())
+  const found = listAll(songs)
     .filter(({ listing }) => archived === "all" || (listing.archivedAt !== null) === archived)
     .filter(({ tags }) => wanted === null || tags.includes(wanted))
     .filter(({ text }) => words.every((word) => text.includes(word)))
@@ -92,9 +89,10 @@ async function page({
   };
 }
 
-async function tags(): Promise<SongTag[]> {
+/** The tags of these songs, the most frequent first. */
+export function tagsOfSongs(songs: readonly Song[]): SongTag[] {
   const spellings = new Map<string, Map<string, number>>();
-  for (const { listing } of await all())
+  for (const { listing } of listAll(songs))
     for (const tag of listing.archivedAt === null ? listing.tags : []) {
       const counts = spellings.get(tagKey(tag)) ?? new Map<string, number>();
       spellings.set(tagKey(tag), counts.set(tag, (counts.get(tag) ?? 0) + 1));
@@ -109,4 +107,7 @@ async function tags(): Promise<SongTag[]> {
 }
 
 /** The songs of a visitor in pages: the same answers as the server gives, worked out on this device. */
-export const deviceSongs = { page, tags };
+export const deviceSongs = {
+  page: async (question: SongQuestion) => pageOfSongs(await deviceShelf.list("songs"), question),
+  tags: async () => tagsOfSongs(await deviceShelf.list("songs")),
+};

@@ -1,17 +1,24 @@
-import { createStore, delMany, entries, get, promisifyRequest, set, type UseStore } from "idb-keyval";
+import { createStore, promisifyRequest, type UseStore } from "idb-keyval";
 import { ApiError } from "./apiError";
+
+/** What one step reads and writes. Await nothing but these within a step: the browser ends it otherwise. */
+export interface DeviceItems {
+  get(key: string): Promise<unknown>;
+  /** all whose key begins so */
+  list(prefix: string): Promise<unknown[]>;
+  set(key: string, value: unknown): void;
+  delete(key: string): void;
+}
 
 /** What the device shelf needs of a key-value store. Every item has its own key, so that two tabs never overwrite each other's work. */
 export interface DeviceStorage {
-  get(key: string): Promise<unknown>;
-  set(key: string, value: unknown): Promise<void>;
-  delete(keys: string[]): Promise<void>;
-  entries(): Promise<[string, unknown][]>;
-  /** Reads and deletes in one step, so that an edit made meanwhile in another tab is not lost. */
-  deleteIf(key: string, test: (value: unknown) => boolean): Promise<boolean>;
+  read<T>(work: (items: Pick<DeviceItems, "get" | "list">) => Promise<T>): Promise<T>;
+  /** Reads and writes in one step: no other tab comes in between, and what is thrown undoes all of it. */
+  change<T>(work: (items: DeviceItems) => Promise<T>): Promise<T>;
 }
 
 function refusal(error: unknown): ApiError {
+  if (error instanceof ApiError) return error;
   if (error instanceof DOMException && error.name === "QuotaExceededError")
     return new ApiError(
       0,
@@ -27,28 +34,43 @@ function refusal(error: unknown): ApiError {
 
 let store: UseStore | null = null;
 
-async function attempt<T>(work: (store: UseStore) => Promise<T>): Promise<T> {
+function itemsOf(items: IDBObjectStore): DeviceItems {
+  return {
+    get: (key) => promisifyRequest<unknown>(items.get(key)),
+    list: (prefix) => promisifyRequest<unknown[]>(items.getAll(IDBKeyRange.bound(prefix, `${prefix}\uffff`))),
+    set: (key, value) => void items.put(value, key),
+    delete: (key) => void items.delete(key),
+  };
+}
+
+async function step<T>(mode: IDBTransactionMode, work: (items: DeviceItems) => Promise<T>): Promise<T> {
   try {
     store ??= createStore("larkspan", "shelf");
-    return await work(store);
+    return await store(mode, async (items) => {
+      try {
+        const result = await work(itemsOf(items));
+        await promisifyRequest(items.transaction);
+        return result;
+      } catch (error) {
+        abort(items.transaction);
+        throw error;
+      }
+    });
   } catch (error) {
     throw refusal(error);
   }
 }
 
+function abort(transaction: IDBTransaction): void {
+  try {
+    transaction.abort();
+  } catch {
+    // The browser ended it already.
+  }
+}
+
 /** IndexedDB. Rejects with "no-storage" where the browser refuses it and "device-full" where the quota is used up. */
 export const indexedDbStorage: DeviceStorage = {
-  get: (key) => attempt((kept) => get(key, kept)),
-  set: (key, value) => attempt((kept) => set(key, value, kept)),
-  delete: (keys) => attempt((kept) => delMany(keys, kept)),
-  entries: () => attempt((kept) => entries<string>(kept)),
-  deleteIf: (key, test) =>
-    attempt((kept) =>
-      kept("readwrite", async (items) => {
-        const fits = test(await promisifyRequest(items.get(key)));
-        if (fits) items.delete(key);
-        await promisifyRequest(items.transaction);
-        return fits;
-      }),
-    ),
+  read: (work) => step("readonly", work),
+  change: (work) => step("readwrite", work),
 };

@@ -24,13 +24,22 @@ export const collections = [
   "instruments",
 ] as const satisfies readonly Collection[];
 
+/** What may be asked for when something is kept. */
+export interface PutOptions {
+  /** a song: keep the state before as a version, however young the newest one is */
+  version?: boolean;
+}
+
 /** One person's belongings, wherever they are kept. Everything rejects with ApiError only. */
 export interface Shelf {
   list<C extends Collection>(name: C): Promise<Items[C][]>;
   /** Rejects with 404 "not-found" where there is none. */
   get<C extends Collection>(name: C, id: string): Promise<Items[C]>;
-  /** Creates or replaces, by the item's own id. */
-  put<C extends Collection>(name: C, item: Items[C]): Promise<Items[C]>;
+  /**
+   * Creates or replaces, by the item's own id, and gives what is kept. A song that was changed since it was read is not
+   * overwritten: 409 "changed-elsewhere".
+   */
+  put<C extends Collection>(name: C, item: Items[C], options?: PutOptions): Promise<Items[C]>;
   /** Takes go with their voice, decisions with their song. Removing what is not there is no error. */
   remove(name: Collection, id: string): Promise<void>;
 }

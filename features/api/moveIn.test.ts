@@ -6,6 +6,7 @@ import { deviceShelf } from "./deviceShelf";
 import { moveIn } from "./moveIn";
 import { session } from "./session";
 import { shelf } from "./shelf";
+import { songVersions } from "./songVersions";
 
 jest.mock("idb-keyval", () => jest.requireActual<{ memoryIdb: object }>("@/__tests__/client/memoryIdb").memoryIdb);
 
@@ -38,7 +39,7 @@ async function singAndDecide() {
 }
 
 const puts = () => api.calls.filter((call) => call.startsWith("PUT"));
-const onDevice = () => [...kept.keys()].filter((key) => !key.startsWith("seeded/"));
+const onDevice = () => [...kept.keys()].filter((key) => !/^(seeded|history)\//.test(key));
 
 it("moves everything in an order in which parents come first, and empties the device", async () => {
   const { voice, song, take, decision, instrument } = await singAndDecide();
@@ -134,6 +135,36 @@ it("keeps an edit that another tab made while its item was on the way", async ()
   api.intercept = () => undefined;
   await moveIn.resume();
   expect((await shelf.get("songs", song.id)).title).toBe("Edited meanwhile");
+});
+
+describe("a song that is in the account already, from a start that broke off", () => {
+  /** The song arrived, but its acknowledgement did not. */
+  const brokenOff = async () => {
+    const song = await shelf.put("songs", aSong({ title: "As it was" }));
+    await session.signUp(credentials);
+    api.tables.songs.set(song.id, { owner: session.current().account?.id ?? "", item: song });
+    return song;
+  };
+
+  it("is brought up to date with what was changed on the device", async () => {
+    const song = await brokenOff();
+    await deviceShelf.put("songs", { ...song, title: "Changed" });
+    await deviceShelf.put("songs", { ...song, title: "Changed twice", revision: 2 });
+    expect(await moveIn.resume()).toMatchObject({ status: "done", moved: 1, stayed: [] });
+    expect(await shelf.get("songs", song.id)).toMatchObject({ title: "Changed twice", revision: 2 });
+    expect(onDevice()).toEqual([]);
+  });
+
+  it("stays as it was worked on in the account, with the device's state among its versions", async () => {
+    const song = await brokenOff();
+    await shelf.put("songs", { ...song, title: "Changed in the account" });
+    await deviceShelf.put("songs", { ...song, title: "Changed on the device" });
+    expect(await moveIn.resume()).toMatchObject({ status: "done", moved: 1, stayed: [] });
+    expect((await shelf.get("songs", song.id)).title).toBe("Changed in the account");
+    const titles = (await songVersions.list(song.id)).map(({ title }) => title);
+    expect(titles).toEqual(["Changed on the device", "Changed in the account", "As it was"]);
+    expect(onDevice()).toEqual([]);
+  });
 });
 
 describe("the demonstration", () => {

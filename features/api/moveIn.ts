@@ -54,6 +54,23 @@ function parentsOf(name: Collection, item: Items[Collection]): string[] {
   return voiceId === null ? [songId] : [songId, voiceId];
 }
 
+/**
+ * Puts a song into the account. Where the account holds another state of it, from an earlier start that broke off, the
+ * later one stays the present one and the other becomes a version: nothing is lost.
+ */
+async function putSong(song: Items["songs"]): Promise<void> {
+  try {
+    // The device counts changes for itself: its revision says nothing about the account's.
+    await serverShelf.put("songs", { ...song, revision: 0 });
+  } catch (error) {
+    if (!(error instanceof ApiError && error.code === "changed-elsewhere")) throw error;
+    const there = await serverShelf.get("songs", song.id);
+    const put = await serverShelf.put("songs", { ...song, revision: there.revision }, { version: true });
+    // In its first revision it is this device's own earlier copy; in a later one it was worked on in the account.
+    if (there.revision > 1) await serverShelf.put("songs", { ...there, revision: put.revision }, { version: true });
+  }
+}
+
 async function isSuperfluous(entry: Entry, belongings: Belongings): Promise<(song: Items["songs"]) => boolean> {
   if (entry === "sign-up" || belongings.untouched.size === 0) return () => false;
   if (entry === "sign-in") return (song) => belongings.untouched.has(song.id);
@@ -75,7 +92,8 @@ async function moveAll(entry: Entry): Promise<void> {
       return;
     }
     try {
-      if (name !== "songs" || !superfluous(item as Items["songs"])) await serverShelf.put(name, item);
+      if (name !== "songs") await serverShelf.put(name, item);
+      else if (!superfluous(item as Items["songs"])) await putSong(item as Items["songs"]);
     } catch (error) {
       if (!(error instanceof ApiError) || (!error.refused && error.status < 500)) throw error;
       stayed.set(item.id, { name, id: item.id, title: titleOf(name, item), reason: reasonOf(error) });

@@ -6,7 +6,8 @@ import type { Items, Shelf } from "./items";
 export const serverShelf: Shelf = {
   list: (name) => http.get(`/${name}`),
   get: (name, id) => http.get(`/${name}/${encodeURIComponent(id)}`),
-  put: (name, item) => http.put<Items[typeof name]>(`/${name}/${encodeURIComponent(item.id)}`, item),
+  put: (name, item, { version = false } = {}) =>
+    http.put<Items[typeof name]>(`/${name}/${encodeURIComponent(item.id)}${version ? "?version=1" : ""}`, item),
   async remove(name, id) {
     try {
       await http.delete(`/${name}/${encodeURIComponent(id)}`);

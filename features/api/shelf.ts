@@ -11,6 +11,6 @@ async function place(): Promise<Shelf> {
 export const shelf: Shelf = {
   list: async (name) => (await place()).list(name),
   get: async (name, id) => (await place()).get(name, id),
-  put: async (name, item) => (await place()).put(name, item),
+  put: async (name, item, options) => (await place()).put(name, item, options),
   remove: async (name, id) => (await place()).remove(name, id),
 };

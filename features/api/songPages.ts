@@ -1,21 +1,8 @@
-import type { SongOrder, SongPage, SongTag } from "@/shared/contract/songListing";
+import type { SongPage, SongTag } from "@/shared/contract/songListing";
 import { deviceSongs } from "./deviceSongs";
 import { http } from "./httpClient";
 import { session } from "./session";
-
-/** Which songs to list. Left out: all that stand on the shelf, by title, 50 to a page. */
-export interface SongQuestion {
-  /** words that must all be found in title, tags or words of the chart */
-  q?: string;
-  tag?: string | null;
-  /** true: those put aside; "all": both */
-  archived?: boolean | "all";
-  sort?: SongOrder;
-  /** 1 to 200 */
-  limit?: number;
-  /** `next` of the page before */
-  cursor?: string | null;
-}
+import type { SongQuestion } from "./songQuestion";
 
 const isSignedIn = async () => (await session.settled()).status === "signed-in";
 
@@ -27,7 +14,8 @@ function addressOf({ q, tag, archived, sort, limit, cursor }: SongQuestion): str
   if (sort !== undefined) search.set("sort", sort);
   if (limit !== undefined) search.set("limit", String(limit));
   if (cursor) search.set("cursor", cursor);
-  return search.size > 0 ? `/songs/page?${search}` : "/songs/page";
+  const query = search.toString();
+  return query === "" ? "/songs/page" : `/songs/page?${query}`;
 }
 
 /** Songs in pages, without their charts and notes, from the account of the signed-in or from this device. */

@@ -78,6 +78,14 @@ const commands = {
     const args = [...typescript, path.join(root, "__tests__", "bench", "voiceBench.ts"), ...process.argv.slice(3)];
     await together([{ args, env: {} }]);
   },
+
+  async "bench:key"() {
+    await ensurePackages({ root, say });
+    const absent = ensureDebianPackages(["abcmidi", "abcm2ps"], say);
+    if (absent.length > 0) say(`Not to be had here, so what needs them is left out: ${absent.join(", ")}`);
+    const args = [...typescript, path.join(root, "__tests__", "bench", "keyBench.ts"), ...process.argv.slice(3)];
+    await together([{ args, env: {} }]);
+  },
 };
 
 /** Runs a program that plays with the whole product in a browser. */

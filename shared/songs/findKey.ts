@@ -1,6 +1,6 @@
-import type { Chord } from "../music/chord";
+import { type Chord, chordPitchClasses } from "../music/chord";
 import { type KeyName, keyFifths, type Mode, scaleSteps, spellTonic, tonicPitchClass } from "../music/keyName";
-import { glyphs } from "../music/pitch";
+import { glyphs, pitchClass } from "../music/pitch";
 import { type Chart, chartTokens } from "./chart";
 import { chordEvidence } from "./chordEvidence";
 import { melodyEvidence } from "./melodyEvidence";
@@ -45,6 +45,14 @@ const fewChords = 8;
 const cueWorth = 0.04;
 const cuesNeeded = 1.5;
 const modes = ["major", "minor"] as const;
+const churchModes = ["dorian", "mixolydian"] as const;
+/**
+ * A tune must speak for a mode that much more clearly than for plain minor or major, which are far commoner; less so
+ * where it never touches the plain note.
+ */
+const rareness = { touched: 0.04, pure: -0.02 };
+/** What a mode loses where the song has chords, but none that only the mode would have. */
+const unheardInChords = 0.02;
 
 /**
  * Ranks all 24 major and minor keys.
@@ -73,7 +81,8 @@ export function rankKeys(evidence: KeyEvidence): RankedKey[] {
 
 /**
  * Finds the key of a song from its chords, its tune, or both: pitch-class profiles, first and last chord or note,
- * cadences, the chords on the first, fourth and fifth step, and the tune's range; dorian and mixolydian by their chords.
+ * cadences, the chords on the first, fourth and fifth step, and the tune's range; dorian and mixolydian by what only they
+ * have.
  *
  * @param evidence a chart, the notes of a tune, or both
  * @returns the likeliest key with the runner-up, or null if there is neither chord nor note
@@ -82,16 +91,18 @@ export function rankKeys(evidence: KeyEvidence): RankedKey[] {
 export function findKey(evidence: KeyEvidence): KeyFinding | null {
   const chords = chordsOf(evidence);
   const ranked = rankKeys(evidence);
-  const mode = evidence.stated ? undefined : modalReadings(chords)[0];
-  const modal = mode && ranked[0] ? rankedAs(mode, chords, ranked[0].score) : null;
-  const [best, next, ...others] = (modal ? [...ranked, modal] : ranked).sort((a, b) => b.score - a.score);
+  // Chords that go to and fro between two homes are read from the first; a tune may tell better.
+  const readings = modalReadings(chords).slice(0, evidence.notes?.length ? 2 : 1);
+  const [best, next, ...others] = [...ranked, ...rankModes(evidence, chords, readings)].sort(
+    (a, b) => b.score - a.score,
+  );
   if (!best || !next) return null;
   const margin = best.score - next.score;
   const heard = chords.length + (evidence.notes?.length ?? 0) / 3;
   const spread = temperature * (1 + fewChords / heard);
   const beliefs = [best, next, ...others].map(({ score }) => Math.exp((score - best.score) / spread));
   const confidence = 1 / beliefs.reduce((sum, belief) => sum + belief, 0);
-  const reasons = best === modal ? mode!.reasons(best.key) : reasonsFor(evidence, chords, best.key);
+  const reasons = reasonsFor(evidence, chords, best.key, readings);
   if (margin < closeMargin) reasons.push(`It could be ${next.key.tonic} ${next.key.mode}: the two are close.`);
   return { key: best.key, runnerUp: next.key, confidence, margin, reasons: [...new Set(reasons)].map(glyphs) };
 }
@@ -100,25 +111,85 @@ function chordsOf({ chart }: KeyEvidence): Chord[] {
   return chart ? chartTokens(chart).flatMap((token) => (token.chord ? [token.chord] : [])) : [];
 }
 
-/** A mode beside the best of the plain keys. */
-function rankedAs({ tonic, mode, cues }: ModalReading, chords: readonly Chord[], best: number): RankedKey {
-  const written = chords.find((chord) => tonicPitchClass(chord.root) === tonic)?.root;
-  return { key: spelled(tonic, mode, written), score: best + cueWorth * (cues - cuesNeeded) };
+/** Dorian and mixolydian, as far as chords or tune speak for them. */
+function rankModes(evidence: KeyEvidence, chords: readonly Chord[], readings: readonly ModalReading[]): RankedKey[] {
+  const ofChords = chordEvidence(chords);
+  const notes = evidence.notes ?? [];
+  const ofTune = melodyEvidence(notes);
+  const chordShare = !ofTune ? 1 : ofChords ? 0.55 : 0;
+  const plainest = ofChords ? Math.max(...everyTonic((tonic) => modes.map((mode) => ofChords.score(tonic, mode)))) : 0;
+  const written = new Map(chords.map((chord) => [tonicPitchClass(chord.root), chord.root]));
+  return everyTonic((tonic) =>
+    churchModes.flatMap((mode): RankedKey[] => {
+      const reading = readings.find((each) => each.tonic === tonic && each.mode === mode);
+      const stated = isExactly(evidence, tonic, mode);
+      const mark = markOf(notes, tonic, mode);
+      if (!stated && !reading && (mark === null || chords.some((chord) => opposes(chord, tonic, mode)))) return [];
+      const like = scaleSteps(mode).includes(3) ? "minor" : "major";
+      const inChords = reading
+        ? plainest + cueWorth * (reading.cues - cuesNeeded)
+        : (ofChords?.score(tonic, like) ?? 0) - unheardInChords;
+      const inTune = (ofTune?.score(tonic, mode) ?? 0) - rareness[mark ?? "touched"];
+      const word = stated
+        ? statedWorth + rareness.touched
+        : isStated(evidence, tonic, like)
+          ? statedWorth - cueWorth
+          : 0;
+      const score = chordShare * inChords + (1 - chordShare) * inTune + word;
+      return [{ key: spelled(tonic, mode, written.get(tonic)), score }];
+    }),
+  );
 }
 
-function reasonsFor(evidence: KeyEvidence, chords: readonly Chord[], key: KeyName): string[] {
+function everyTonic<T>(of: (tonic: number) => readonly T[]): T[] {
+  return Array.from({ length: 12 }, (_, tonic) => of(tonic)).flat();
+}
+
+/** The degree that only the mode has, the plain one in its place. */
+const modeMarks = { dorian: { own: 9, plain: 8 }, mixolydian: { own: 10, plain: 11 } };
+
+/** How a tune shows the mode: it has the mode's note and hardly the plain one; null if it does not. */
+function markOf(
+  notes: readonly MelodyNote[],
+  tonic: number,
+  mode: keyof typeof modeMarks,
+): keyof typeof rareness | null {
+  const { own, plain } = modeMarks[mode];
+  const time = (degree: number) =>
+    notes.reduce((sum, { midi, duration }) => (pitchClass(midi - tonic) === degree ? sum + duration : sum), 0);
+  // The raised sixth of melodic minor comes with the raised seventh.
+  if (time(own) === 0 || time(plain) >= 0.25 * time(own) || time(11) > time(10)) return null;
+  return time(plain) === 0 && time(11) === 0 ? "pure" : "touched";
+}
+
+/** Whether a chord sounds the plain note that the mode has not. */
+function opposes(chord: Chord, tonic: number, mode: keyof typeof modeMarks): boolean {
+  return chordPitchClasses(chord).includes((tonic + modeMarks[mode].plain) % 12);
+}
+
+function reasonsFor(
+  evidence: KeyEvidence,
+  chords: readonly Chord[],
+  key: KeyName,
+  readings: readonly ModalReading[],
+): string[] {
   const pc = tonicPitchClass(key.tonic);
+  const reading = readings.find(({ tonic, mode }) => tonic === pc && mode === key.mode);
   return [
     ...(isStated(evidence, pc, key.mode) ? [`It is written down as ${key.tonic} ${evidence.stated?.mode}.`] : []),
-    ...(chordEvidence(chords)?.reasons(pc, key.mode, key) ?? []),
+    ...(reading?.reasons(key) ?? chordEvidence(chords)?.reasons(pc, key.mode, key) ?? []),
     ...(melodyEvidence(evidence.notes ?? [])?.reasons(pc, key.mode, key) ?? []),
   ];
+}
+
+function isExactly({ stated }: KeyEvidence, tonic: number, mode: Mode): boolean {
+  return stated?.mode === mode && tonicPitchClass(stated.tonic) === tonic;
 }
 
 /** A mode counts as major or minor by its third. */
 function isStated({ stated }: KeyEvidence, tonic: number, mode: Mode): boolean {
   if (!stated || tonicPitchClass(stated.tonic) !== tonic) return false;
-  return scaleSteps(stated.mode).includes(mode === "minor" ? 3 : 4);
+  return scaleSteps(stated.mode).includes(scaleSteps(mode).includes(3) ? 3 : 4);
 }
 
 /** As the chart writes it where that is a key people use, else with the fewest accidentals. */

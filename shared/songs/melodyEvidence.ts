@@ -21,6 +21,19 @@ const panel = [
   { profile: krumhanslKessler, weight: 0.15 },
 ];
 
+type PlainMode = "major" | "minor";
+
+/**
+ * Modes by the plain one that has their third, and the two degrees that change places in its profile: what is at home
+ * in minor a sixth above the tonic is, in dorian, a semitone higher.
+ *
+ * @see common practice: dorian is minor with a major sixth, mixolydian major with a minor seventh
+ */
+const turnedModes: Partial<Record<Mode, { like: PlainMode; swap: readonly [number, number] }>> = {
+  dorian: { like: "minor", swap: [8, 9] },
+  mixolydian: { like: "major", swap: [10, 11] },
+};
+
 /**
  * What the notes of a tune say about its key.
  *
@@ -34,21 +47,17 @@ export function melodyEvidence(notes: readonly MelodyNote[]): Evidence | null {
   if (!first || !last) return null;
   const weights = new Array<number>(12).fill(0);
   for (const note of notes) weights[pitchClass(note.midi)]! += note.duration;
-  const matches = panel.map(({ profile, weight }) => ({ weight, keys: correlateProfiles(weights, profile) }));
+  const correlation = correlations(weights);
   const total = weights.reduce((sum, weight) => sum + weight, 0);
   const low = Math.min(...[...new Set(notes.map((note) => note.midi))]);
   const degreeOf = (midi: number, tonic: number) => (pitchClass(midi) - tonic + 12) % 12;
   const score = (tonic: number, mode: Mode): number => {
-    const correlation = matches.reduce(
-      (sum, { weight, keys }) => sum + weight * (keys.find((key) => key.tonic === tonic && key.mode === mode)?.r ?? 0),
-      0,
-    );
     const ending = degreeOf(last.midi, tonic);
     const opening = degreeOf(first.midi, tonic);
-    const third = mode === "minor" ? 3 : 4;
+    const third = scaleSteps(mode).includes(3) ? 3 : 4;
     const lowest = degreeOf(low, tonic);
     return (
-      correlation +
+      correlation(tonic, mode) +
       (ending === 0 ? 0.2 : ending === third || ending === 7 ? 0.03 : 0) +
       (opening === 0 ? 0.05 : opening === 7 ? 0.04 : opening === third ? 0.03 : 0) +
       (lowest === 0 || lowest === 7 ? 0.02 : 0)
@@ -70,4 +79,30 @@ export function melodyEvidence(notes: readonly MelodyNote[]): Evidence | null {
     return said;
   };
   return { score, reasons };
+}
+
+/** How well weights fit a key, over the whole panel; asked for the same key again it does not count anew. */
+function correlations(weights: readonly number[]): (tonic: number, mode: Mode) => number {
+  const known = new Map<string, number>();
+  return (tonic, mode) => {
+    const turned = turnedModes[mode];
+    const like = turned?.like ?? (mode === "minor" ? "minor" : "major");
+    const swapped = turned?.swap.join() ?? "";
+    const at = (key: { tonic: number; mode: Mode }) => `${swapped} ${key.tonic} ${key.mode}`;
+    if (!known.has(at({ tonic, mode: like }))) {
+      // Exchanging two weights is exchanging the two degrees of the profile, for this tonic alone.
+      const shown = [...weights];
+      if (turned) {
+        const [one, other] = turned.swap.map((degree) => (tonic + degree) % 12) as [number, number];
+        [shown[one], shown[other]] = [weights[other]!, weights[one]!];
+      }
+      for (const { profile, weight } of panel) {
+        for (const match of correlateProfiles(shown, profile)) {
+          if (turned && match.tonic !== tonic) continue;
+          known.set(at(match), (known.get(at(match)) ?? 0) + weight * match.r);
+        }
+      }
+    }
+    return known.get(at({ tonic, mode: like })) ?? 0;
+  };
 }

@@ -89,9 +89,7 @@ test.each(["phone", "wide"] as const)(
     await page.getByTestId("song-sort").selectOption("fit");
     await page.waitForURL(/sort=fit/);
     // The five notes of the imported tune sit better than any whole song; songs without a tune stand last.
-    await page.waitForFunction(() =>
-      /^(?:Dm?)?Steps /.test(document.querySelector('[data-testid^="song-"]')?.textContent ?? ""),
-    );
+    await rows(page).first().filter({ hasText: /Steps/ }).waitFor();
 
     await search(page).fill(`herring ${size}`);
     await page.getByText("2 songs found").waitFor();

@@ -38,7 +38,7 @@ export default function SongsRoute() {
       const moved = songMoveWords({ chart: song.writtenKey ? "-" : "" }, shift);
       const words = elsewhere
         ? `Decided for ${other} since ${decidedOn(decision)}`
-        : `My key since ${decidedOn(decision)}, ${moved}. ${decision.reason.replace(/\.$/, "")}`;
+        : `My key since ${decidedOn(decision)}, ${moved}`;
       return { key, shift, elsewhere, words };
     },
     [bySong, voice, voices],

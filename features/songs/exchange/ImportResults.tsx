@@ -54,7 +54,11 @@ export function ImportResults({ results, done }: { results: readonly ImportResul
 function Words({ result, done }: { result: ImportResult; done: boolean }) {
   const from = result.title === null || result.title === result.file ? "" : `${result.file}: `;
   if (result.outcome === "refused")
-    return <Text variant="small" tone="brick">{`${from}not imported. ${result.reason}`}</Text>;
+    return (
+      <Text variant="small" tone="brick">
+        {from === "" ? `Not imported. ${result.reason}` : `${from}not imported. ${result.reason}`}
+      </Text>
+    );
   const link = (label: string) =>
     done ? <TextLink href={{ pathname: "/songs/[id]", params: { id: result.id } }}>{label}</TextLink> : null;
   if (result.outcome === "known")

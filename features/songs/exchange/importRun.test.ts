@@ -34,7 +34,10 @@ test("many files of all kinds at once, each with what became of it", async () =>
       file("book.abc", abcBook),
       file("again.txt", "D  A\nlow water\n"),
       file("holiday.jpg", "no song"),
-      file("shelf.larkspan.json", writeSongsFile([aSong({ title: "Storm Glass", chart: "Am\nfalling", tags: ["slow"] })])),
+      file(
+        "shelf.larkspan.json",
+        writeSongsFile([aSong({ title: "Storm Glass", chart: "Am\nfalling", tags: ["slow"] })]),
+      ),
     ],
     quiet,
     () => undefined,
@@ -48,7 +51,13 @@ test("many files of all kinds at once, each with what became of it", async () =>
     ["Storm Glass", "imported"],
   ]);
   const songs = await shelf.list("songs");
-  expect(songs.map(({ title }) => title).sort()).toEqual(["Gulls", "Net Loft", "Quay Steps", "Storm Glass", "slack water"]);
+  expect(songs.map(({ title }) => title).sort()).toEqual([
+    "Gulls",
+    "Net Loft",
+    "Quay Steps",
+    "Storm Glass",
+    "slack water",
+  ]);
   expect(songs.find(({ title }) => title === "Storm Glass")?.tags).toEqual(["slow"]);
   expect(songs.find(({ title }) => title === "Net Loft")).toMatchObject({
     writtenKey: { tonic: "G", mode: "major" },

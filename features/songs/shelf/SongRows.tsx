@@ -68,7 +68,7 @@ function SongRow({
   const span = voice && sungSpan(song, mine, voice);
   const fit = fitOf?.(song) ?? null;
   const played = playedWords(song.playedAt, new Date());
-  const facts = [mine && `${mine.words}.`, listingWords(song), played !== "" && `Played ${played}.`];
+  const facts = [mine && `${mine.words}.`, listingWords(song, mine), played !== "" && `Played ${played}.`];
   return (
     <View style={{ flexDirection: "row", alignItems: "center" }}>
       <RowChoice song={song} actions={actions} />

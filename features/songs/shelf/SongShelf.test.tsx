@@ -58,7 +58,11 @@ const titles = () => screen.getAllByRole("listitem").map((row) => within(row).ge
 const found = (words: string) => waitFor(() => expect(screen.getByText(words)).toBeTruthy());
 
 test("each row says its place in the list, its key, its tags and its span over the voice", async () => {
-  await open([aSong({ title: "Gulls", tags: ["slow", "choir"], tune: span(57, 66) }), aSong({ title: "Terns" })], {}, true);
+  await open(
+    [aSong({ title: "Gulls", tags: ["slow", "choir"], tune: span(57, 66) }), aSong({ title: "Terns" })],
+    {},
+    true,
+  );
   const [first, second] = screen.getAllByRole("listitem");
   expect(first?.getAttribute("aria-posinset")).toBe("1");
   expect(first?.getAttribute("aria-setsize")).toBe("2");

@@ -23,6 +23,7 @@ import type { ShelfKey } from "./shelfRow";
 import { foundWords, type ShelfView } from "./shelfView";
 import { SongRows } from "./SongRows";
 import { SongTable } from "./SongTable";
+import { usePlaceInList } from "./usePlaceInList";
 import { useShelf } from "./useShelf";
 
 export interface SongShelfProps {
@@ -43,6 +44,7 @@ export function SongShelf({ view, onView, voice, mineOf }: SongShelfProps) {
   const [menu, setMenu] = useState<SongListing | null>(null);
   const [chosen, setChosen] = useState<ReadonlySet<string> | null>(null);
   const { songs, total } = shelf;
+  usePlaceInList(songs !== undefined && !shelf.stale);
   const bare = view.q.trim() === "" && view.tag === null && !view.archived;
   if (songs === undefined) {
     return shelf.error ? (

@@ -58,13 +58,13 @@ export function spanWords(span: SungSpan, key: KeyName | null): string {
   return span.comfortable ? `${ends}, all of it comfortable` : `${ends}, within your reach`;
 }
 
-/** What a row says under its title besides the decided key. */
-export function listingWords(song: SongListing): string {
+/** What a row says under its title besides the decided key; with one it is no longer only there to be tried. */
+export function listingWords(song: SongListing, mine: ShelfKey | null = null): string {
   const sign = song.writtenKey ? glyphs(keySign(song.writtenKey)) : null;
   const key = sign !== null ? `Written in ${sign}` : song.span ? `Home note ${glyphs(song.span.home)}` : "No key yet";
   const parts = [
     key,
-    song.demo === null ? null : "a song to try Larkspan with",
+    song.demo === null || mine ? null : "a song to try Larkspan with",
     song.span === null ? "no melody yet" : null,
   ];
   return `${parts.filter((part) => part !== null).join(", ")}.`;

@@ -1,3 +1,4 @@
+import { createPortal } from "react-dom";
 import { View } from "react-native";
 import { Button } from "@/features/ui/Button";
 import { IconButton } from "@/features/ui/IconButton";
@@ -8,11 +9,15 @@ import { useLayout } from "@/features/ui/useLayout";
 import { webProps, webStyle } from "@/features/ui/webStyle";
 import type { SongActions } from "./useSongActions";
 
+/** Height of the buttons at the foot of a phone, with some air. */
+const foot = 86;
+
 /** What was just done, at the foot of the window, with the way back; it stays until it is closed or something else is done. */
 export function DoneBar({ actions: { notice, error, dismiss } }: { actions: SongActions }) {
   const phone = useLayout() === "phone";
   const words = error ? `It is as it was. ${error.message}` : (notice?.words ?? null);
-  return (
+  // Outside the page, so that the buttons at its foot never lie over it.
+  return createPortal(
     <View
       role="status"
       {...webProps({ "aria-live": "polite" })}
@@ -22,7 +27,7 @@ export function DoneBar({ actions: { notice, error, dismiss } }: { actions: Song
         zIndex: 5,
         left: phone ? 8 : sizes.rail + 32,
         right: phone ? 8 : "auto",
-        bottom: phone ? `calc(${sizes.bar + 8}px + env(safe-area-inset-bottom))` : 24,
+        bottom: phone ? `calc(${sizes.bar + foot}px + env(safe-area-inset-bottom))` : 24,
         pointerEvents: words === null ? "none" : "auto",
       })}
     >
@@ -61,6 +66,7 @@ export function DoneBar({ actions: { notice, error, dismiss } }: { actions: Song
           <IconButton icon="close" label="Close this note" onPress={dismiss} color={colors.inkSoft} />
         </View>
       )}
-    </View>
+    </View>,
+    document.body,
   );
 }

@@ -10,7 +10,8 @@ import {
 import { ApiError } from "@/features/api/apiError";
 import { queryClient } from "@/features/api/queryClient";
 import { shelf } from "@/features/api/shelf";
-import { songPages, type SongQuestion } from "@/features/api/songPages";
+import { songPages } from "@/features/api/songPages";
+import type { SongQuestion } from "@/features/api/songQuestion";
 import type { Song } from "@/shared/contract/song";
 import type { SongPage } from "@/shared/contract/songListing";
 import { seedDemoSongs } from "./shelf/demoShelf";

@@ -37,11 +37,22 @@ it("fills the chosen field by a tap on the ladder and moves a note by a semitone
   open();
   await act(async () => fireEvent.click(screen.getByRole("button", { name: "G3" })));
   expect(valueOf("by-hand-lowest")).toBe("G3");
+  // The next tap is for the highest note; back to the lowest.
+  await act(async () => fireEvent.click(screen.getByRole("radio", { name: "Lowest" })));
   await act(async () => fireEvent.click(screen.getByRole("button", { name: "Lowest note: a semitone higher" })));
   expect(valueOf("by-hand-lowest")).toBe("Ab3");
   await act(async () => fireEvent.click(screen.getByRole("radio", { name: "Highest" })));
   await act(async () => fireEvent.click(screen.getByRole("button", { name: "D5" })));
   expect(valueOf("by-hand-highest")).toBe("D5");
+});
+
+it("two taps on the ladder are a voice", async () => {
+  const onKeep = open();
+  await act(async () => fireEvent.click(screen.getByRole("button", { name: "F3" })));
+  await act(async () => fireEvent.click(screen.getByRole("button", { name: "C5" })));
+  expect([valueOf("by-hand-lowest"), valueOf("by-hand-highest")]).toEqual(["F3", "C5"]);
+  await send();
+  expect(onKeep).toHaveBeenCalledWith({ range: { lowMidi: 53, highMidi: 72 }, comfort: { lowMidi: 55, highMidi: 69 } });
 });
 
 it("begins with the notes that the voice has", () => {

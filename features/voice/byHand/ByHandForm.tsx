@@ -7,7 +7,9 @@ import { Form } from "@/features/ui/Form";
 import { IconButton } from "@/features/ui/IconButton";
 import { Notice } from "@/features/ui/Notice";
 import { Text } from "@/features/ui/Text";
+import { colors, sizes } from "@/features/ui/theme";
 import { useLayout } from "@/features/ui/useLayout";
+import { webStyle } from "@/features/ui/webStyle";
 import { noteName, parseNoteName } from "@/shared/music/pitch";
 import type { SingingVoice } from "@/shared/keys/keyScore";
 import { readByHand, usualComfort, type ByHandFields } from "./byHand";
@@ -48,7 +50,7 @@ export function ByHandForm({ voice, busy, refusal, onKeep }: ByHandFormProps) {
     resolver,
     mode: "onTouched",
   });
-  const wide = useLayout() === "wide";
+  const phone = useLayout() === "phone";
   const [active, setActive] = useState<keyof ByHandFields>("lowest");
   const values = watch();
   const set = (name: keyof ByHandFields, midi: number) => {
@@ -61,58 +63,113 @@ export function ByHandForm({ voice, busy, refusal, onKeep }: ByHandFormProps) {
     const reading = readByHand(typed);
     if (reading.ok) onKeep(reading.voice);
   });
-  const foot = (
-    <>
-      {refusal !== null && (
-        <Notice kind="error" title="Not kept">
-          {refusal}
-        </Notice>
-      )}
-      <Button submit label="Keep these notes" busy={busy} onPress={() => undefined} testID="by-hand-keep" />
-      <Text variant="small" tone="soft">
-        Type a letter and an octave: C4 is the C in the middle of a piano. Singing a few seconds finds the same notes
-        for you.
-      </Text>
-    </>
+  const tap = (midi: number) => {
+    set(active, midi);
+    // Two taps are a voice: the second one is the highest note.
+    if (active === "lowest" && getValues("highest") === "") setActive("highest");
+  };
+  const refused = refusal !== null && (
+    <Notice kind="error" title="Not kept">
+      {refusal}
+    </Notice>
   );
+  const how = (
+    <Text variant="small" tone="soft">
+      Type a letter and an octave: C4 is the C in the middle of a piano. Singing a few seconds finds the same notes for
+      you.
+    </Text>
+  );
+  const button = (
+    <Button
+      submit
+      label="Keep these notes"
+      busy={busy}
+      onPress={() => undefined}
+      style={phone ? { flexGrow: 1 } : null}
+      testID="by-hand-keep"
+    />
+  );
+  const fieldOf = ({ name, label, hint }: (typeof rows)[number]) => (
+    <Controller
+      key={name}
+      control={control}
+      name={name}
+      render={({ field, fieldState }) => (
+        <View style={[{ flexDirection: "row", alignItems: "flex-start", gap: 4 }, phone ? pair : null]}>
+          <View style={{ flexGrow: 1, flexShrink: 1 }}>
+            <Field
+              label={label}
+              hint={hintFor(name, hint, values)}
+              value={field.value}
+              onChangeText={field.onChange}
+              onBlur={field.onBlur}
+              error={fieldState.error?.message}
+              testID={`by-hand-${name}`}
+            />
+          </View>
+          {!phone && (
+            <View style={{ flexDirection: "row", marginTop: 26 }}>
+              <SemitoneSteps label={label} onStep={(by) => step(name, by)} />
+            </View>
+          )}
+        </View>
+      )}
+    />
+  );
+  const ladder = (
+    <NoteLadder
+      values={values}
+      active={active}
+      onActive={setActive}
+      onNote={tap}
+      steps={phone ? <SemitoneSteps label={labelOf(active)} onStep={(by) => step(active, by)} /> : null}
+    />
+  );
+  if (phone) {
+    const [low, high, ...comfort] = rows;
+    return (
+      <Form label="Notes of your voice" onSubmit={() => void keep()} gap={16}>
+        <View style={pairs}>{[low, high].map((row) => row && fieldOf(row))}</View>
+        {ladder}
+        <View style={pairs}>{comfort.map(fieldOf)}</View>
+        {how}
+        <View style={[{ paddingVertical: 10, gap: 10, backgroundColor: colors.paper, zIndex: 1 }, aboveBar]}>
+          {refused}
+          {button}
+        </View>
+      </Form>
+    );
+  }
   return (
     <Form label="Notes of your voice" onSubmit={() => void keep()} gap={20}>
-      <View style={wide ? { flexDirection: "row", gap: 64, alignItems: "flex-start" } : { gap: 20 }}>
-        <View style={[{ gap: 20 }, wide ? { flexGrow: 1, flexBasis: 0 } : null]}>
-          {rows.map(({ name, label, hint }) => (
-            <Controller
-              key={name}
-              control={control}
-              name={name}
-              render={({ field, fieldState }) => (
-                <View style={{ flexDirection: "row", alignItems: "flex-start", gap: 4 }}>
-                  <View style={{ flexGrow: 1, flexShrink: 1 }}>
-                    <Field
-                      label={label}
-                      hint={hintFor(name, hint, values)}
-                      value={field.value}
-                      onChangeText={field.onChange}
-                      onBlur={field.onBlur}
-                      error={fieldState.error?.message}
-                      testID={`by-hand-${name}`}
-                    />
-                  </View>
-                  <View style={{ flexDirection: "row", marginTop: 26 }}>
-                    <IconButton icon="minus" label={`${label}: a semitone lower`} onPress={() => step(name, -1)} />
-                    <IconButton icon="plus" label={`${label}: a semitone higher`} onPress={() => step(name, 1)} />
-                  </View>
-                </View>
-              )}
-            />
-          ))}
-          {wide && foot}
+      <View style={{ flexDirection: "row", gap: 64, alignItems: "flex-start" }}>
+        <View style={{ gap: 20, flexGrow: 1, flexBasis: 0 }}>
+          {rows.map(fieldOf)}
+          {refused}
+          {button}
+          {how}
         </View>
-        <View style={wide ? { flexGrow: 1, flexBasis: 0 } : null}>
-          <NoteLadder values={values} active={active} onActive={setActive} onNote={(midi) => set(active, midi)} />
-        </View>
+        <View style={{ flexGrow: 1, flexBasis: 0 }}>{ladder}</View>
       </View>
-      {!wide && foot}
     </Form>
+  );
+}
+
+const pairs = { flexDirection: "row", gap: 12 } as const;
+const pair = { flexGrow: 1, flexBasis: 0 } as const;
+/** The button stays in reach of the thumb, over the bar at the foot. */
+const aboveBar = webStyle({ position: "sticky", bottom: `calc(${sizes.bar}px + env(safe-area-inset-bottom))` });
+
+function labelOf(name: keyof ByHandFields): string {
+  return rows.find((row) => row.name === name)?.label ?? "";
+}
+
+function SemitoneSteps({ label, onStep }: { label: string; onStep: (by: -1 | 1) => void }) {
+  return (
+    <>
+      <IconButton icon="minus" label={`${label}: a semitone lower`} onPress={() => onStep(-1)} />
+      <IconButton icon="plus" label={`${label}: a semitone higher`} onPress={() => onStep(1)} />
+    </>
   );
 }
 

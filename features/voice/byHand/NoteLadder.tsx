@@ -1,8 +1,9 @@
-import { useEffect, useRef } from "react";
+import { useEffect, useRef, type ReactNode } from "react";
 import { Pressable, ScrollView, View } from "react-native";
 import { Segmented } from "@/features/ui/Segmented";
 import { Text } from "@/features/ui/Text";
 import { colors, sizes } from "@/features/ui/theme";
+import { useLayout } from "@/features/ui/useLayout";
 import { webProps } from "@/features/ui/webStyle";
 import { parseNoteName } from "@/shared/music/pitch";
 import type { ByHandFields } from "./byHand";
@@ -14,13 +15,16 @@ export interface NoteLadderProps {
   active: keyof ByHandFields;
   onActive: (name: keyof ByHandFields) => void;
   onNote: (midi: number) => void;
+  /** moves the chosen note by a semitone; where each field has its own, null */
+  steps: ReactNode;
 }
 
 const top = 84;
 const bottom = 36;
 const rungs = Array.from({ length: top - bottom + 1 }, (_, k) => top - k);
 const rungHeight = 28;
-const shownHeight = 11 * rungHeight;
+/** On a phone the fields before and the button below take their room. */
+const shownHeight = { phone: 9 * rungHeight, other: 16 * rungHeight };
 
 const targets = [
   { value: "lowest", label: "Lowest" },
@@ -30,23 +34,29 @@ const targets = [
 ] as const;
 
 /** All semitones from C2 to C6, one under the other, to tap instead of typing. */
-export function NoteLadder({ values, active, onActive, onNote }: NoteLadderProps) {
+export function NoteLadder({ values, active, onActive, onNote, steps }: NoteLadderProps) {
   const scroll = useRef<ScrollView>(null);
+  const shown = useLayout() === "phone" ? shownHeight.phone : shownHeight.other;
   const low = parseNoteName(values.lowest);
   const high = parseNoteName(values.highest);
   const chosen = parseNoteName(values[active]);
   const first = useRef(chosen ?? high ?? 60);
   useEffect(() => {
-    scroll.current?.scrollTo({ y: (top - first.current) * rungHeight - shownHeight / 2, animated: false });
-  }, []);
+    scroll.current?.scrollTo({ y: (top - first.current) * rungHeight - shown / 2, animated: false });
+  }, [shown]);
   return (
     <View style={{ gap: 8 }}>
-      <Text variant="label">Or tap the notes</Text>
+      <View style={{ flexDirection: "row", alignItems: "center", minHeight: steps ? 48 : 0 }}>
+        <Text variant="label" style={{ flexGrow: 1 }}>
+          Or tap the notes
+        </Text>
+        {steps}
+      </View>
       <Segmented label="Which note a tap sets" options={targets} value={active} onChange={onActive} />
       <ScrollView
         ref={scroll}
         style={{
-          height: shownHeight,
+          height: shown,
           borderWidth: 1,
           borderColor: colors.line,
           borderRadius: sizes.radius,

@@ -53,7 +53,7 @@ export function NoteLine({ notes, home, voice, chosen, onPress, spelling = "comm
       onLayout={({ nativeEvent }) => setRoom(nativeEvent.layout.width)}
       style={{ flexDirection: "row", height: height + 2 }}
     >
-      <Svg width={namesWide} height={height} aria-hidden>
+      <Svg width={namesWide} height={height} aria-hidden style={{ flexShrink: 0 }}>
         {rungsOf(scale).map((midi) => (
           <SvgLabel
             key={midi}
@@ -71,7 +71,7 @@ export function NoteLine({ notes, home, voice, chosen, onPress, spelling = "comm
       </Svg>
       {room > 0 && (
         <View
-          style={{ flexGrow: 1, flexShrink: 1, overflow: "scroll" }}
+          style={{ flexGrow: 1, flexShrink: 1, flexBasis: 0, minWidth: 0, overflow: "scroll" }}
           {...webProps({
             tabIndex: width > room - namesWide ? 0 : undefined,
             role: "group",

@@ -215,12 +215,14 @@ export function TessituragramLegend() {
   );
 }
 
+/** Semitones that are named first where there is little room: C, then the fifth, then what lies between. */
+const rank = [0, 7, 4, 9, 2, 5, 11];
+
 /** Naturals, as many as stand apart. */
 function names(low: number, high: number, step: number): number[] {
   const all = Array.from({ length: high - low + 1 }, (_, k) => low + k).filter(isNatural);
-  if (step * 1.5 >= 24) return all;
-  const some = all.filter((midi) => [0, 4, 7].includes(midi % 12) || (step >= 12 && midi % 12 === 9));
-  return step >= 7
-    ? some.filter((midi, k) => k === 0 || (midi - some[k - 1]!) * step >= 24)
-    : all.filter((m) => m % 12 === 0);
+  const byRank = [...all].sort((a, b) => rank.indexOf(a % 12) - rank.indexOf(b % 12));
+  const named: number[] = [];
+  for (const midi of byRank) if (named.every((other) => Math.abs(other - midi) * step >= 24)) named.push(midi);
+  return named;
 }

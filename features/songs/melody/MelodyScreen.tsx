@@ -14,7 +14,8 @@ import type { Song } from "@/shared/contract/song";
 import type { Instrument } from "@/shared/instruments/instrument";
 import type { SingingVoice } from "@/shared/keys/keyScore";
 import { tonicPitchClass } from "@/shared/music/keyName";
-import { glyphs, noteName } from "@/shared/music/pitch";
+import { glyphs, noteName, pitchClass } from "@/shared/music/pitch";
+import { tuneSpan } from "@/shared/songs/tuneSpan";
 import { useSaveSong } from "../songQueries";
 import { NoteEntry } from "./entry/NoteEntry";
 import { useTapTone } from "./entry/useTapTone";
@@ -38,6 +39,9 @@ export interface MelodyScreenProps {
 }
 
 type Way = "sing" | "keys" | "neck" | "ends";
+
+/** A keyboard for a tune of which nothing is known begins here. */
+const usualLow = 60;
 
 const ways = [
   { value: "sing", label: "Sing" },
@@ -92,7 +96,7 @@ export function MelodyScreen({ song, voice, instrument, chooser, sing, onKept }:
           on={way}
           instrument={instrument}
           chooser={chooser}
-          from={48 + (tonicPitchClass(home) > 6 ? 0 : 12)}
+          from={12 * Math.floor((notes.length > 0 ? Math.min(...notes.map(({ midi }) => midi)) : usualLow) / 12)}
           onNote={(note) => {
             tone().play(note.midi);
             editor.enter(note);
@@ -114,14 +118,15 @@ export function MelodyScreen({ song, voice, instrument, chooser, sing, onKept }:
       onPlay={() => (player.at === null ? player.play(notes, chosen?.from ?? 0) : player.stop())}
     />
   );
-  const about = !byEnds && notes.length > 0 && (
-    <View style={{ gap: 20 }}>
-      <HomeChoice home={home} proposed={proposed} onChange={editor.setHome} kept={editor.movedWords} />
-      <View style={{ gap: 8 }}>
-        <Heading level={2}>Where it lies</Heading>
-        <Tessituragram notes={notes} home={home} voice={voice} spelling={spelling} testID="tessituragram" />
-        <TessituragramLegend />
-      </View>
+  const hasNotes = !byEnds && notes.length > 0;
+  const rest = hasNotes && (
+    <HomeChoice home={home} proposed={proposed} onChange={editor.setHome} kept={editor.movedWords} />
+  );
+  const place = hasNotes && (
+    <View style={{ gap: 8 }}>
+      <Heading level={2}>Where it lies</Heading>
+      <Tessituragram notes={notes} home={home} voice={voice} spelling={spelling} testID="tessituragram" />
+      <TessituragramLegend />
     </View>
   );
   return (
@@ -160,26 +165,33 @@ export function MelodyScreen({ song, voice, instrument, chooser, sing, onKept }:
           <View style={{ gap: 24 }}>{tune ?? entry}</View>
           <View style={{ gap: 28 }}>
             {tune !== null && entry}
-            {about}
+            {rest}
+            {place}
           </View>
         </View>
       ) : (
         <View style={{ gap: 24, paddingTop: 12 }}>
           {entry}
+          {rest}
           {tune}
-          {about}
+          {place}
         </View>
       )}
     </Screen>
   );
 }
 
+/** What the fields of the ends begin with: the ends that are known, the home note over the lowest. */
 function endsOf({ tune, writtenKey }: Song): SpanTexts {
   const home = tune?.home ?? writtenKey?.tonic;
-  const name = (midi: number) => glyphs(noteName(midi, spellingOfHome(home ?? "C")));
-  if (tune?.kind !== "span" || home === undefined)
-    return { home: home === undefined ? "" : glyphs(`${home}4`), low: "", high: "" };
-  const low = Math.round(tune.lowMidi);
-  const over = low + ((tonicPitchClass(home) - (low % 12) + 12) % 12);
-  return { home: name(over), low: name(low), high: name(tune.highMidi) };
+  if (home === undefined) return { home: "", low: "", high: "" };
+  const span = tuneSpan(tune);
+  if (!span) return { home: glyphs(`${home}4`), low: "", high: "" };
+  const name = (midi: number) => glyphs(noteName(midi, spellingOfHome(home)));
+  const { lowMidi, highMidi } = span;
+  return {
+    home: name(lowMidi + pitchClass(tonicPitchClass(home) - lowMidi)),
+    low: name(lowMidi),
+    high: name(highMidi),
+  };
 }

@@ -123,8 +123,8 @@ export function TuneView({ history, dispatch, home, spelling, voice, sounding, o
       )}
       <Text variant="small" tone="soft">
         {names === "steps"
-          ? "1 is the home note; a comma is an octave lower, a stroke an octave higher. Under each name stands its length in beats."
-          : "Under each name stands its length in beats. Arrow keys walk along the notes and move them, Delete takes one out."}
+          ? "1 is the home note; a comma is an octave lower, a stroke an octave higher. Under each step stands its syllable, or its length in beats."
+          : "Under each name stands its syllable, or its length in beats. Arrow keys walk along the notes and move them, Delete takes one out."}
       </Text>
     </View>
   );

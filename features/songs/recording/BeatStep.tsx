@@ -9,6 +9,7 @@ import { Text } from "@/features/ui/Text";
 import { colors, sizes } from "@/features/ui/theme";
 import { tempoOfTaps } from "@/shared/songs/formSketch";
 import type { Listening, ListeningEvent } from "./listening";
+import { useTap } from "./useTap";
 
 export interface StepProps {
   state: Listening;
@@ -24,6 +25,7 @@ export function BeatStep({ state, dispatch, clock }: StepProps) {
   const { taps, beatsPerBar } = state;
   const tapped = useMemo(() => tempoOfTaps(taps), [taps]);
   const [typed, setTyped] = useState("");
+  const tap = useTap(() => dispatch({ kind: "tap", atS: clock() }));
   const tempo = state.tempo ?? tapped?.tempo ?? null;
   const readings = tapped
     ? [
@@ -43,7 +45,7 @@ export function BeatStep({ state, dispatch, clock }: StepProps) {
         role="button"
         aria-label="Tap with the beat"
         testID="tap-beat"
-        onPressIn={() => dispatch({ kind: "tap", atS: clock() })}
+        {...tap}
         style={{
           height: 128,
           borderRadius: sizes.radius,

@@ -4,9 +4,10 @@ import { Button } from "@/features/ui/Button";
 import { LiveText } from "@/features/ui/LiveText";
 import { Text } from "@/features/ui/Text";
 import { colors, sizes } from "@/features/ui/theme";
-import { formParts, partNames } from "@/shared/songs/formSketch";
+import { formParts, partNames, type PartName } from "@/shared/songs/formSketch";
 import type { StepProps } from "./BeatStep";
 import { clockWords } from "./listening";
+import { useTap } from "./useTap";
 
 export interface FormStepProps extends StepProps {
   tempo: number | null;
@@ -31,30 +32,13 @@ export function FormStep({ state, dispatch, clock, tempo, busy, onTake }: FormSt
       </Text>
       <View style={{ flexDirection: "row", flexWrap: "wrap", gap: 10 }}>
         {partNames.map((name) => (
-          <Pressable
+          <PartButton
             key={name}
-            role="button"
-            aria-label={`${name} begins`}
-            disabled={endS !== null}
-            testID={`part-${name}`}
-            onPressIn={() => dispatch({ kind: "part", name, atS: clock() })}
-            style={{
-              flexGrow: 1,
-              flexBasis: "30%",
-              minHeight: 64,
-              borderRadius: sizes.radius,
-              borderWidth: 1.5,
-              borderColor: colors.plum,
-              backgroundColor: marks.at(-1)?.name === name && running ? "var(--soft)" : colors.card,
-              alignItems: "center",
-              justifyContent: "center",
-              opacity: endS === null ? 1 : 0.5,
-            }}
-          >
-            <Text variant="strong" tone="plum">
-              {name}
-            </Text>
-          </Pressable>
+            name={name}
+            ended={endS !== null}
+            sounding={marks.at(-1)?.name === name && running}
+            onBegin={() => dispatch({ kind: "part", name, atS: clock() })}
+          />
         ))}
       </View>
       <View style={{ flexDirection: "row", flexWrap: "wrap", gap: 10, alignItems: "center" }}>
@@ -133,6 +117,44 @@ export function FormStep({ state, dispatch, clock, tempo, busy, onTake }: FormSt
         />
       )}
     </View>
+  );
+}
+
+interface PartButtonProps {
+  name: PartName;
+  ended: boolean;
+  sounding: boolean;
+  onBegin: () => void;
+}
+
+function PartButton({ name, ended, sounding, onBegin }: PartButtonProps) {
+  const tap = useTap(() => {
+    if (!ended) onBegin();
+  });
+  return (
+    <Pressable
+      role="button"
+      aria-label={`${name} begins`}
+      disabled={ended}
+      testID={`part-${name}`}
+      {...tap}
+      style={{
+        flexGrow: 1,
+        flexBasis: "30%",
+        minHeight: 64,
+        borderRadius: sizes.radius,
+        borderWidth: sounding ? 2.5 : 1.5,
+        borderColor: colors.plum,
+        backgroundColor: sounding ? "var(--soft)" : colors.card,
+        alignItems: "center",
+        justifyContent: "center",
+        opacity: ended ? 0.5 : 1,
+      }}
+    >
+      <Text variant="strong" tone="plum">
+        {name}
+      </Text>
+    </Pressable>
   );
 }
 

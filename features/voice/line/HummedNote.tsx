@@ -2,7 +2,7 @@ import { useEffect, useRef } from "react";
 import { View } from "react-native";
 import { Button } from "@/features/ui/Button";
 import { LiveText } from "@/features/ui/LiveText";
-import { enoughHoldS, holdNow } from "../guided/guidedHold";
+import { enoughHoldS, holdNow } from "../guided/hearing/guidedHold";
 import { useHeard } from "../listening/useHeard";
 import { LineFailure } from "./LineFailure";
 import { LineListening } from "./LineListening";

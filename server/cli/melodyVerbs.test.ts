@@ -28,6 +28,12 @@ beforeAll(async () => {
   };
   for (const [name, content] of Object.entries(files)) await writeFile(at(name), content);
   await writeFile(at("bytes.txt"), Uint8Array.of(0, 1, 2));
+  await writeFile(at("empty.txt"), "");
+  await writeFile(at("bom.txt"), "\ufeffG  D\nla la\n");
+  await writeFile(at("crlf.txt"), "G  D\r\nla la\r\n");
+  await writeFile(at("sixteen.txt"), Buffer.from("\ufeffG  D\nla la\n", "utf16le"));
+  await writeFile(at("western.txt"), Buffer.from("G  D\ncafé au quai\n", "latin1"));
+  await writeFile(at("tabs.txt"), "G\tD\nla\tla\n");
   const doReMiFaSo = [50, 52, 54, 55, 57, 54, 50].map((midi) => ({ midi: midi - 0.3, durationS: 0.7 }));
   const { pcm, sampleRate } = singPhrase({ notes: doReMiFaSo, seed: 3, consonants: 0 });
   writeWav(at("sung.wav"), pcm, sampleRate);
@@ -120,6 +126,26 @@ describe("transpose", () => {
     );
   });
 
+  test("a tonic alone takes the mode along, a key that is named in full must have the song's third", async () => {
+    expect(await one(transposeVerb, at("minor.txt"), "--to", "F#")).toMatchObject({ from: "Em", to: "F#m" });
+    expect(await one(transposeVerb, at("minor.txt"), "--to", "F# minor")).toMatchObject({ from: "Em", to: "F#m" });
+    expect(await one(transposeVerb, at("lantern.txt"), "--to", "E major")).toMatchObject({ from: "D", to: "E" });
+    expect(await one(transposeVerb, at("dorian.txt"), "--to", "E")).toMatchObject({ from: "D dorian", to: "E dorian" });
+    await expect(one(transposeVerb, at("minor.txt"), "--to", "E major")).rejects.toThrow(
+      "A song in Em stays minor when it is moved; name a minor key.",
+    );
+  });
+
+  test.each([
+    ["bom.txt", "A  E\nla la\n"],
+    ["crlf.txt", "A  E\r\nla la\r\n"],
+    ["sixteen.txt", "A  E\nla la\n"],
+    ["western.txt", "A  E\ncafé au quai\n"],
+    ["tabs.txt", "A       E\nla      la\n"],
+  ])("reads %s as its writer's program wrote it", async (name, text) => {
+    expect(await one(transposeVerb, at(name), "--to", "A", "--from", "G")).toMatchObject({ text });
+  });
+
   test("leaves what it cannot read", async () => {
     expect(await one(transposeVerb, at("unread.txt"), "--to", "G", "--from", "D")).toMatchObject({
       text: "G  Hx9  D\nla la la",
@@ -142,6 +168,8 @@ test.each<[string, Verb, string[], RegExp]>([
   ["a file that is missing", keyVerb, ["nowhere.txt"], /no such file/],
   ["a folder", keyVerb, ["."], /no file/],
   ["a chart without chords", keyVerb, ["prose.txt"], /no chords/],
+  ["an empty chart", keyVerb, ["empty.txt"], /is empty/],
+  ["a melody where a chart is wanted", transposeVerb, ["lantern.abc", "--to", "D"], /no chart/],
   ["bytes for a chart", transposeVerb, ["bytes.txt", "--to", "D"], /not a text file/],
   ["a broken melody", melodyVerb, ["broken.abc"], /K: line/],
   ["a kind that is not known", melodyVerb, ["other.xyz"], /not known/],

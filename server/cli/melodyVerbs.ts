@@ -22,7 +22,7 @@ export const melodyVerb: Verb = {
       const { mean, sd, q1, median, q3, lowMidi, highMidi } = tessitura(notes)!;
       return {
         file,
-        notes,
+        notes: notes.map(({ start, duration, midi }) => ({ start, duration, midi })),
         home,
         mode,
         lowMidi,
@@ -50,12 +50,19 @@ export const keyVerb: Verb = {
   },
 };
 
+/** "E" alone names a tonic, "E major" and "e" a mode as well. */
+const bareTonic = /^[A-G](?:#|b|♯|♭|[-\s]?(?:sharp|flat))?$/;
+
+/** The key asked for, and whether its mode was named. */
+type Target = KeyName & { named: boolean };
+
 /** A chart in another key. */
 export const transposeVerb: Verb = {
   usage: "transpose FILE… --to KEY [--from KEY]   (chart text; KEY such as D, F#m or Bb)",
   async *run(args) {
     const { values, rest: files } = readOptions(args, ["to", "from"]);
-    const target = readKey(required(values["to"], "to"), "to");
+    const asked = required(values["to"], "to");
+    const target = { ...readKey(asked, "to"), named: !bareTonic.test(asked.trim()) };
     const source = values["from"] === undefined ? null : readKey(values["from"], "from");
     yield* eachFile(named(files, transposeVerb), async (file) => {
       const chart = await chartFromFile(file);
@@ -81,9 +88,9 @@ function thirdOf(mode: Mode): "major" | "minor" {
 }
 
 /** A bare tonic keeps the mode of the song, a mode that is named must have the song's third; null where it has not. */
-function targetFor(from: KeyName, target: KeyName): KeyName | null {
-  if (target.mode === "major") return { tonic: target.tonic, mode: from.mode };
-  return thirdOf(target.mode) === thirdOf(from.mode) ? target : null;
+function targetFor(from: KeyName, { tonic, mode, named }: Target): KeyName | null {
+  if (!named) return { tonic, mode: from.mode };
+  return thirdOf(mode) === thirdOf(from.mode) ? { tonic, mode } : null;
 }
 
 async function evidenceOf(file: string): Promise<KeyEvidence> {
@@ -106,15 +113,16 @@ function inTune({ notes, tuningCents }: RecordedMelody): MelodyNote[] {
 }
 
 /**
- * The key a chart is in; when the target is said to be minor or of another mode, the likeliest one with such a third,
- * if it is likely at all, in that mode.
+ * The key a chart is in; when the mode of the target is named, the likeliest one with such a third, if it is likely at
+ * all, in that mode.
  */
-function writtenKey(chart: Chart, target: KeyName): KeyName {
-  const [best, ...others] = rankKeys({ chart });
-  if (target.mode === "major") return best!.key;
+function writtenKey(chart: Chart, target: Target): KeyName {
+  const found = findKey({ chart })!.key;
+  if (!target.named || found.mode === target.mode) return found;
   const third = thirdOf(target.mode);
+  const [best, ...others] = rankKeys({ chart });
   const like = [best!, ...others].find(({ key }) => key.mode === third);
   return like !== undefined && like.score > best!.score - likelyEnough
     ? { tonic: like.key.tonic, mode: target.mode }
-    : best!.key;
+    : found;
 }

@@ -1,6 +1,7 @@
 import { chartTokens, parseChart, type Chart } from "../../shared/songs/chart";
 import { type MelodyVoice } from "../../shared/songs/melodyVoice";
 import { readMelodyFile } from "../../shared/songs/melodyFile";
+import { decodeText } from "../../shared/songs/textBytes";
 import { readInput, songSize } from "./inputFile";
 import { BadInput } from "./verb";
 
@@ -26,9 +27,13 @@ export async function melodyFromFile(path: string): Promise<MelodyVoice> {
 
 /** A chart with at least one chord. */
 export async function chartFromFile(path: string): Promise<Chart> {
+  if (isMelodyFile(path) || isRecording(path))
+    throw new BadInput(`${path}: This is no chart; a text file with chords over words is wanted.`);
   const bytes = await readInput(path, songSize);
-  if (bytes.includes(0)) throw new BadInput(`${path}: This is no chart; it is not a text file.`);
-  const chart = parseChart(new TextDecoder().decode(bytes));
+  if (bytes.length === 0) throw new BadInput(`${path}: This file is empty.`);
+  const text = decodeText(bytes);
+  if (/[\0-\x08\x0e-\x1a\x1c-\x1f]/.test(text)) throw new BadInput(`${path}: This is no chart; it is not a text file.`);
+  const chart = parseChart(text);
   if (!chartTokens(chart).some((token) => token.chord))
     throw new BadInput(`${path}: There are no chords in this file.`);
   return chart;

@@ -6,7 +6,7 @@ import type { MelodyNote } from "./melody";
 import type { MelodySyllable, WrittenFile, WrittenVoice } from "./melodyVoice";
 import { playingOrder } from "./repeats";
 
-const most = { characters: 2_000_000, tunes: 200, notes: 100_000 };
+const most = { characters: 500_000, tunes: 200, notes: 100_000 };
 /** Fine enough for tuplets of 3, 5, 7 and 9 down to a sixty-fourth; undoes the error of adding thirds. */
 const grid = 20_160;
 const tooLarge: WrittenFile = {

@@ -151,7 +151,7 @@ export function readAbcTune(text: AbcTuneText): AbcTune {
     const music = line.replace(/\\\s*$/, "");
     if (!continued || !words) startLine(here.voice);
     let from = 0;
-    for (const inline of music.matchAll(/\[([A-Za-z]):([^\]]*)\]/g)) {
+    for (const inline of music.matchAll(/\[([A-Za-z]):([^\]]{0,300})\]/g)) {
       here.voice.read(music.slice(from, inline.index), part);
       const before: AbcPart = here;
       change(inline[1]!, inline[2]!);

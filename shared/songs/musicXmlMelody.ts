@@ -7,7 +7,7 @@ import { type XmlElement, child, childNumber, childrenOf, parseXml } from "./xml
 
 const mostNotes = 100_000;
 const mostParts = 64;
-const mostMeasures = 20_000;
+const mostMeasures = 5_000;
 
 interface Part extends PartText {
   name: string;
@@ -27,6 +27,8 @@ export function readMusicXml(source: string): WrittenFile {
     return { ok: false, reason: "This MusicXML file declares entities of its own, so it is not read." };
   if ((source.match(/<note[\s/>]/g)?.length ?? 0) > mostNotes)
     return { ok: false, reason: "This file holds too many notes." };
+  if ((source.match(/<measure[\s/>]/g)?.length ?? 0) > 20 * mostMeasures)
+    return { ok: false, reason: "This score is far larger than a song." };
   const score = parseXml(source);
   if (!score) return { ok: false, reason: "This MusicXML file cannot be read; it is malformed." };
   if (score.name !== "score-partwise" && score.name !== "score-timewise") {

@@ -2,7 +2,7 @@ import { Unzip, UnzipInflate } from "fflate";
 import { child, childrenOf, parseXml } from "./xmlTree";
 import { decodeText } from "./textBytes";
 
-const mostBytes = 20_000_000;
+const mostBytes = 10_000_000;
 const mostFiles = 200;
 /** Small steps, so that a bomb is noticed after at most a few megabytes. */
 const step = 4096;

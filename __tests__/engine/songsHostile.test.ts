@@ -20,17 +20,17 @@ const hostile: [string, string, () => Uint8Array, RegExp][] = [
   ["an empty file", "a.mid", () => new Uint8Array(0), /empty/],
   ["a file of more than 5 MB", "a.abc", () => new Uint8Array(5_000_001), /5 MB/],
   ["a kind that is not known", "a.pdf", () => strToU8("%PDF-1.7"), /not known/],
-  ["a zip bomb", "a.mxl", () => zipSync({ "bomb.xml": new Uint8Array(50_000_000) }, { level: 9 }), /unpacks/],
+  ["a zip bomb", "a.mxl", () => zipSync({ "bomb.xml": new Uint8Array(12_000_000) }, { level: 6 }), /unpacks/],
   [
     "a zip of many bombs",
     "a.mxl",
-    () => zipSync(Object.fromEntries(Array.from({ length: 40 }, (_, k) => [`${k}.xml`, new Uint8Array(1_000_000)]))),
+    () => zipSync(Object.fromEntries(Array.from({ length: 12 }, (_, k) => [`${k}.xml`, new Uint8Array(1_000_000)]))),
     /unpacks/,
   ],
   [
-    "a zip of thousands of files",
+    "a zip of hundreds of files",
     "a.mxl",
-    () => zipSync(Object.fromEntries(Array.from({ length: 3000 }, (_, k) => [`${k}.txt`, new Uint8Array(1)]))),
+    () => zipSync(Object.fromEntries(Array.from({ length: 300 }, (_, k) => [`${k}.txt`, new Uint8Array(1)]))),
     /unpacks/,
   ],
   ["a cut-off zip", "a.mxl", () => zipSync({ "a.xml": strToU8(score(oneNote)) }).subarray(0, 60), /damaged|no score/],
@@ -98,7 +98,7 @@ const hostile: [string, string, () => Uint8Array, RegExp][] = [
   [
     "a zip inside a zip",
     "a.mxl",
-    () => zipSync({ "a.xml": zipSync({ "b.xml": new Uint8Array(20_000_000) }) }),
+    () => zipSync({ "a.xml": zipSync({ "b.xml": new Uint8Array(2_000_000) }) }),
     /malformed|no MusicXML/,
   ],
   [
@@ -143,7 +143,7 @@ const hostile: [string, string, () => Uint8Array, RegExp][] = [
     () => midiTrack(repeated([0, 0x80, 60, 64], 100_000)),
     /too many notes/,
   ],
-  ["a MIDI file of controllers only", "a.mid", () => midiTrack(repeated([0, 0xb0, 7, 64], 900_000)), /too many notes/],
+  ["a MIDI file of controllers only", "a.mid", () => midiTrack(repeated([0, 0xb0, 7, 64], 410_000)), /too many notes/],
   [
     "a MIDI file that waits for years",
     "a.mid",
@@ -206,7 +206,7 @@ test.each(harmless)("%s harm nobody: what can be read is read, quickly", (_, mak
 });
 
 test("a zip whose header says less than it holds is measured by what comes out", () => {
-  const bytes = zipSync({ "bomb.xml": new Uint8Array(50_000_000) }, { level: 9 });
+  const bytes = zipSync({ "bomb.xml": new Uint8Array(12_000_000) }, { level: 6 });
   // Local header: uncompressed size at offset 22; central directory: at 24 behind its signature "PK\1\2".
   const view = new DataView(bytes.buffer, bytes.byteOffset, bytes.byteLength);
   const central = Buffer.from(bytes).indexOf("PK\x01\x02", 0, "latin1");

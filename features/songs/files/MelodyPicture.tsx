@@ -29,7 +29,10 @@ export function MelodyPicture({ notes, home, sounding }: MelodyPictureProps) {
   const [room, setRoom] = useState(0);
   const [turned, setTurned] = useState(0);
   const width = Math.max(120, room);
-  const beats = Math.max(4, 4 * Math.floor((width - names - pad) / leastBeat / 4));
+  const end = notes.reduce((latest, note) => Math.max(latest, note.start + note.duration), 0);
+  const fits = Math.max(4, 4 * Math.floor((width - names - pad) / leastBeat / 4));
+  // A short tune takes the whole width.
+  const beats = Math.min(fits, Math.max(8, Math.ceil(end)));
   const pages = melodyPages(notes, beats);
   const followed =
     sounding === null ? -1 : pages.findIndex((page) => page.notes.some(({ index }) => index === sounding));
@@ -39,7 +42,7 @@ export function MelodyPicture({ notes, home, sounding }: MelodyPictureProps) {
   const pitches = notes.map(({ midi }) => Math.round(midi));
   const low = pitches.reduce((a, b) => Math.min(a, b)) - 1;
   const high = pitches.reduce((a, b) => Math.max(a, b)) + 1;
-  const rung = Math.max(4, Math.min(12, 200 / (high - low)));
+  const rung = Math.max(4, Math.min(14, 220 / (high - low)));
   const foot = pad + (high - low) * rung;
   const worded = notes.some(({ lyric }) => lyric !== undefined);
   const height = foot + pad + (worded ? 2 * line : 0);

@@ -25,7 +25,7 @@ export async function readSongFile(
   file: File,
   { signal, patienceMs = 15_000 }: ReadingOptions = {},
 ): Promise<SongFile> {
-  signal?.throwIfAborted();
+  if (signal?.aborted) throw signal.reason;
   if (file.size > largest)
     return {
       ok: false,
@@ -38,7 +38,7 @@ export async function readSongFile(
   } catch {
     return unopened;
   }
-  signal?.throwIfAborted();
+  if (signal?.aborted) throw signal.reason;
   if (typeof Worker === "undefined") return readHere(file.name, bytes);
   return readBeside(file.name, bytes, patienceMs, signal);
 }

@@ -52,7 +52,14 @@ export function chordEvidence(chords: readonly Chord[]): Evidence | null {
   const correlation = (tonic: number, mode: Mode) =>
     matches.reduce((sum, keys) => sum + (keys.find((key) => key.tonic === tonic && key.mode === mode)?.r ?? 0), 0) /
     matches.length;
+  const counted = new Map<string, number>();
   const score = (tonic: number, mode: Mode): number => {
+    const name = `${tonic} ${mode}`;
+    const known = counted.get(name) ?? count(tonic, mode);
+    counted.set(name, known);
+    return known;
+  };
+  const count = (tonic: number, mode: Mode): number => {
     const kind = mode === "minor" ? "minor" : "major";
     const isTonic = (step: Step) =>
       step.root !== tonic ? 0 : step.third === kind ? 1 : step.third === null ? 0.8 : 0.1;

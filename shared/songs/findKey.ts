@@ -2,7 +2,7 @@ import { type Chord, chordPitchClasses } from "../music/chord";
 import { type KeyName, keyFifths, type Mode, scaleSteps, spellTonic, tonicPitchClass } from "../music/keyName";
 import { glyphs, pitchClass } from "../music/pitch";
 import { type Chart, chartTokens } from "./chart";
-import { chordEvidence } from "./chordEvidence";
+import { chordEvidence, type Evidence } from "./chordEvidence";
 import { melodyEvidence } from "./melodyEvidence";
 import { type ModalReading, modalReadings } from "./modalEvidence";
 import type { MelodyNote } from "./melody";
@@ -61,21 +61,39 @@ const unheardInChords = 0.02;
  * @returns keys best first; empty if there is neither chord nor note
  */
 export function rankKeys(evidence: KeyEvidence): RankedKey[] {
+  return rankPlain(evidence, hear(evidence));
+}
+
+/** Chords and tune with what they say, weighed once. */
+interface Heard {
+  chords: readonly Chord[];
+  notes: readonly MelodyNote[];
+  ofChords: Evidence | null;
+  ofTune: Evidence | null;
+  /** how much the chords count beside the tune, 0 to 1 */
+  chordShare: number;
+  /** roots as the chart spells them, by pitch class */
+  written: ReadonlyMap<number, string>;
+}
+
+function hear(evidence: KeyEvidence): Heard {
   const chords = chordsOf(evidence);
-  const ofChords = chordEvidence(chords);
-  const ofTune = melodyEvidence(evidence.notes ?? []);
-  if (!ofChords && !ofTune) return [];
-  const chordShare = !ofTune ? 1 : ofChords ? 0.55 : 0;
+  const notes = evidence.notes ?? [];
+  const [ofChords, ofTune] = [chordEvidence(chords), melodyEvidence(notes)];
   const written = new Map(chords.map((chord) => [tonicPitchClass(chord.root), chord.root]));
-  const ranked: RankedKey[] = [];
-  for (let tonic = 0; tonic < 12; tonic += 1) {
-    for (const mode of modes) {
+  return { chords, notes, ofChords, ofTune, chordShare: !ofTune ? 1 : ofChords ? 0.55 : 0, written };
+}
+
+function rankPlain(evidence: KeyEvidence, { ofChords, ofTune, chordShare, written }: Heard): RankedKey[] {
+  if (!ofChords && !ofTune) return [];
+  const ranked = everyTonic((tonic) =>
+    modes.map((mode): RankedKey => {
       const score =
         chordShare * (ofChords?.score(tonic, mode) ?? 0) + (1 - chordShare) * (ofTune?.score(tonic, mode) ?? 0);
       const word = isStated(evidence, tonic, mode) ? statedWorth : 0;
-      ranked.push({ key: spelled(tonic, mode, written.get(tonic)), score: score + word });
-    }
-  }
+      return { key: spelled(tonic, mode, written.get(tonic)), score: score + word };
+    }),
+  );
   return ranked.sort((a, b) => b.score - a.score);
 }
 
@@ -89,20 +107,18 @@ export function rankKeys(evidence: KeyEvidence): RankedKey[] {
  * @see J. Albrecht and D. Shanahan (2013); D. Temperley, Music and Probability (2007); keyProfiles.ts
  */
 export function findKey(evidence: KeyEvidence): KeyFinding | null {
-  const chords = chordsOf(evidence);
-  const ranked = rankKeys(evidence);
+  const all = hear(evidence);
   // Chords that go to and fro between two homes are read from the first; a tune may tell better.
-  const readings = modalReadings(chords).slice(0, evidence.notes?.length ? 2 : 1);
-  const [best, next, ...others] = [...ranked, ...rankModes(evidence, chords, readings)].sort(
-    (a, b) => b.score - a.score,
-  );
+  const readings = modalReadings(all.chords).slice(0, all.notes.length > 0 ? 2 : 1);
+  const ranked = [...rankPlain(evidence, all), ...rankModes(evidence, all, readings)];
+  const [best, next, ...others] = ranked.sort((a, b) => b.score - a.score);
   if (!best || !next) return null;
   const margin = best.score - next.score;
-  const heard = chords.length + (evidence.notes?.length ?? 0) / 3;
-  const spread = temperature * (1 + fewChords / heard);
+  const much = all.chords.length + all.notes.length / 3;
+  const spread = temperature * (1 + fewChords / much);
   const beliefs = [best, next, ...others].map(({ score }) => Math.exp((score - best.score) / spread));
   const confidence = 1 / beliefs.reduce((sum, belief) => sum + belief, 0);
-  const reasons = reasonsFor(evidence, chords, best.key, readings);
+  const reasons = reasonsFor(evidence, all, best.key, readings);
   if (margin < closeMargin) reasons.push(`It could be ${next.key.tonic} ${next.key.mode}: the two are close.`);
   return { key: best.key, runnerUp: next.key, confidence, margin, reasons: [...new Set(reasons)].map(glyphs) };
 }
@@ -112,19 +128,16 @@ function chordsOf({ chart }: KeyEvidence): Chord[] {
 }
 
 /** Dorian and mixolydian, as far as chords or tune speak for them. */
-function rankModes(evidence: KeyEvidence, chords: readonly Chord[], readings: readonly ModalReading[]): RankedKey[] {
-  const ofChords = chordEvidence(chords);
-  const notes = evidence.notes ?? [];
-  const ofTune = melodyEvidence(notes);
-  const chordShare = !ofTune ? 1 : ofChords ? 0.55 : 0;
+function rankModes(evidence: KeyEvidence, heard: Heard, readings: readonly ModalReading[]): RankedKey[] {
+  const { chords, notes, ofChords, ofTune, chordShare, written } = heard;
   const plainest = ofChords ? Math.max(...everyTonic((tonic) => modes.map((mode) => ofChords.score(tonic, mode)))) : 0;
-  const written = new Map(chords.map((chord) => [tonicPitchClass(chord.root), chord.root]));
+  const sounding = new Set(chords.flatMap(chordPitchClasses));
   return everyTonic((tonic) =>
     churchModes.flatMap((mode): RankedKey[] => {
       const reading = readings.find((each) => each.tonic === tonic && each.mode === mode);
       const stated = isExactly(evidence, tonic, mode);
       const mark = markOf(notes, tonic, mode);
-      if (!stated && !reading && (mark === null || chords.some((chord) => opposes(chord, tonic, mode)))) return [];
+      if (!stated && !reading && (mark === null || sounding.has((tonic + modeMarks[mode].plain) % 12))) return [];
       const like = scaleSteps(mode).includes(3) ? "minor" : "major";
       const inChords = reading
         ? plainest + cueWorth * (reading.cues - cuesNeeded)
@@ -162,14 +175,9 @@ function markOf(
   return time(plain) === 0 && time(11) === 0 ? "pure" : "touched";
 }
 
-/** Whether a chord sounds the plain note that the mode has not. */
-function opposes(chord: Chord, tonic: number, mode: keyof typeof modeMarks): boolean {
-  return chordPitchClasses(chord).includes((tonic + modeMarks[mode].plain) % 12);
-}
-
 function reasonsFor(
   evidence: KeyEvidence,
-  chords: readonly Chord[],
+  { ofChords, ofTune }: Heard,
   key: KeyName,
   readings: readonly ModalReading[],
 ): string[] {
@@ -177,8 +185,8 @@ function reasonsFor(
   const reading = readings.find(({ tonic, mode }) => tonic === pc && mode === key.mode);
   return [
     ...(isStated(evidence, pc, key.mode) ? [`It is written down as ${key.tonic} ${evidence.stated?.mode}.`] : []),
-    ...(reading?.reasons(key) ?? chordEvidence(chords)?.reasons(pc, key.mode, key) ?? []),
-    ...(melodyEvidence(evidence.notes ?? [])?.reasons(pc, key.mode, key) ?? []),
+    ...(reading?.reasons(key) ?? ofChords?.reasons(pc, key.mode, key) ?? []),
+    ...(ofTune?.reasons(pc, key.mode, key) ?? []),
   ];
 }
 

@@ -11,6 +11,9 @@ jest.mock("../files/lazyReaders", () => ({
 }));
 // The DOM of the tests lacks these of the browser.
 Object.assign(globalThis, { TextDecoder, TextEncoder });
+AbortSignal.prototype.throwIfAborted ??= function (this: AbortSignal) {
+  if (this.aborted) throw new DOMException("Ended.", "AbortError");
+};
 Blob.prototype.arrayBuffer ??= function (this: Blob) {
   return new Promise((done) => {
     const reader = new FileReader();

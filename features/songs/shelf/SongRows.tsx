@@ -1,4 +1,5 @@
 import { Link } from "expo-router";
+import { memo, useMemo } from "react";
 import type { TextStyle } from "react-native";
 import { View } from "react-native";
 import { KeySign } from "@/features/ui/KeySign";
@@ -26,11 +27,8 @@ export interface SongRowsProps {
 
 /** The songs as rows, for phones: as many as are in sight, with their place in the whole list. */
 export function SongRows({ songs, total, more, ...row }: SongRowsProps) {
-  const { frame, rows, before, after, measure } = useShownRows(
-    songs.map(({ id }) => id),
-    112,
-    more,
-  );
+  const keys = useMemo(() => songs.map(({ id }) => id), [songs]);
+  const { frame, rows, before, after, measure } = useShownRows(keys, 112, more);
   return (
     <div ref={frame} role="list" data-testid="songs" style={{ paddingTop: before, paddingBottom: after }}>
       {rows.map(({ index, key }) => {
@@ -55,7 +53,8 @@ export function SongRows({ songs, total, more, ...row }: SongRowsProps) {
   );
 }
 
-function SongRow({
+/** Drawn once, however often the list is scrolled. */
+const SongRow = memo(function SongRow({
   song,
   voice,
   mineOf,
@@ -137,4 +136,4 @@ function SongRow({
       <RowMenuButton song={song} actions={actions} />
     </View>
   );
-}
+});

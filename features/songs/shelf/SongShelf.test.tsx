@@ -25,6 +25,7 @@ const span = (lowMidi: number, highMidi: number) => ({ kind: "span" as const, lo
 beforeEach(async () => {
   kept.clear();
   queryClient.clear();
+  window.scrollTo = () => undefined;
   // The DOM of the tests knows dialogs, but not how to open them.
   HTMLDialogElement.prototype.showModal = function () {
     this.open = true;

@@ -1,5 +1,5 @@
 import { useQuery } from "@tanstack/react-query";
-import { useState } from "react";
+import { useMemo, useState, type Dispatch, type SetStateAction } from "react";
 import { View } from "react-native";
 import { Button } from "@/features/ui/Button";
 import { EmptyState } from "@/features/ui/EmptyState";
@@ -44,6 +44,9 @@ export function SongShelf({ view, onView, voice, mineOf }: SongShelfProps) {
   const [menu, setMenu] = useState<SongListing | null>(null);
   const [chosen, setChosen] = useState<ReadonlySet<string> | null>(null);
   const { songs, total } = shelf;
+  // The same objects from one scroll to the next, so that rows are drawn once; new ones when the fit is known better.
+  const fits = useMemo(() => voice && judgedBy(voice, shelf.judged), [voice, shelf.judged]);
+  const rowActions = useMemo(() => ({ onMenu: setMenu, chosen, onChoose: choosing(setChosen) }), [chosen]);
   usePlaceInList(songs !== undefined && !shelf.stale);
   const bare = view.q.trim() === "" && view.tag === null && !view.archived;
   if (songs === undefined) {
@@ -84,20 +87,14 @@ export function SongShelf({ view, onView, voice, mineOf }: SongShelfProps) {
         <DoneBar actions={actions} />
       </View>
     );
-  const choose = (song: SongListing, on: boolean) => {
-    const next = new Set(chosen);
-    if (on) next.add(song.id);
-    else next.delete(song.id);
-    setChosen(next);
-  };
   const list = {
     songs,
     total,
     more: shelf.more,
     voice,
     mineOf,
-    fitOf: voice && ((song: SongListing) => fitOf(song, voice)),
-    actions: { onMenu: setMenu, chosen, onChoose: choose },
+    fitOf: fits,
+    actions: rowActions,
   };
   const sortsByNobody = view.sort === "fit" && voice === null;
   const shown = menu && (songs.find(({ id }) => id === menu.id) ?? menu);
@@ -164,4 +161,19 @@ function noneWords({ q, tag, archived }: ShelfView): string {
   return archived
     ? "Nothing is put aside. What you do not sing just now can rest here; it is kept whole."
     : "No songs.";
+}
+
+/** The fit of songs for a voice; made anew whenever more notes were read. */
+function judgedBy(voice: SingingVoice, _times: number): (song: SongListing) => number | null {
+  return (song) => fitOf(song, voice);
+}
+
+function choosing(set: Dispatch<SetStateAction<ReadonlySet<string> | null>>) {
+  return (song: SongListing, on: boolean) =>
+    set((before) => {
+      const next = new Set(before);
+      if (on) next.add(song.id);
+      else next.delete(song.id);
+      return next;
+    });
 }

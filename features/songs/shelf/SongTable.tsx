@@ -1,19 +1,12 @@
-import { Link } from "expo-router";
-import type { CSSProperties, ReactNode } from "react";
+import { useMemo, type CSSProperties, type ReactNode } from "react";
 import { useWindowDimensions } from "react-native";
 import { keySpanWidth } from "@/features/span/keySpanGeometry";
 import { VoiceStripHeader } from "@/features/span/VoiceStrip";
-import { KeySign } from "@/features/ui/KeySign";
-import { Text } from "@/features/ui/Text";
 import { colors, fonts, sizes } from "@/features/ui/theme";
 import { unseen } from "@/features/ui/unseen";
-import { webStyle } from "@/features/ui/webStyle";
-import type { SongListing } from "@/shared/contract/songListing";
-import { RowChoice, RowMenuButton } from "./RowTools";
-import { listingWords, playedWords, spanWords, sungSpan, shownKey } from "./shelfRow";
 import { shelfScale } from "./shelfScale";
 import type { ShelfSort } from "./shelfView";
-import { SpanBar } from "./SpanBar";
+import { SongCells } from "./SongCells";
 import type { SongRowsProps } from "./SongRows";
 import { useShownRows } from "./useShownRows";
 
@@ -24,11 +17,8 @@ export interface SongTableProps extends SongRowsProps {
 
 /** The songs as a table, for wide screens: the spans stand on one scale, so that the eye compares along a line. */
 export function SongTable({ songs, total, more, voice, mineOf, fitOf, actions, sort, onSort }: SongTableProps) {
-  const { frame, rows, before, after, measure } = useShownRows(
-    songs.map(({ id }) => id),
-    60,
-    more,
-  );
+  const keys = useMemo(() => songs.map(({ id }) => id), [songs]);
+  const { frame, rows, before, after, measure } = useShownRows(keys, 60, more);
   const room = Math.min(sizes.content, useWindowDimensions().width - sizes.rail - 2 * sizes.gutterWide);
   const roomy = room >= 1100;
   const scale = voice && shelfScale(voice);
@@ -104,82 +94,17 @@ export function SongTable({ songs, total, more, voice, mineOf, fitOf, actions, s
           {rows.map(({ index, key }) => {
             const song = songs[index];
             if (!song) return null;
-            const mine = mineOf(song);
-            const sung = voice && sungSpan(song, mine, voice);
-            const fit = fitOf?.(song) ?? null;
-            const written = shownKey(song, null);
             return (
               <tr key={key} ref={measure} data-index={index} aria-rowindex={index + 2}>
-                {actions.chosen !== null && (
-                  <td style={{ ...td, padding: 0 }}>
-                    <RowChoice song={song} actions={actions} />
-                  </td>
-                )}
-                <th scope="row" style={{ ...td, textAlign: "left", fontWeight: 400 }}>
-                  <Link
-                    href={{ pathname: "/songs/[id]", params: { id: song.id } }}
-                    testID={`song-${song.id}`}
-                    style={webStyle({ display: "block", padding: "6px 0", minHeight: 44, boxSizing: "border-box" })}
-                  >
-                    <Text variant="strong">{song.title}</Text>
-                    {!roomy && song.tags.length > 0 && (
-                      <Text variant="tiny" tone="plum" style={webStyle({ display: "block" })}>
-                        {song.tags.join(" · ")}
-                      </Text>
-                    )}
-                    {(song.demo !== null || (!written && !song.span)) && (
-                      <Text variant="tiny" tone="soft" style={webStyle({ display: "block" })}>
-                        {song.demo !== null ? "a song to try Larkspan with" : listingWords(song)}
-                      </Text>
-                    )}
-                  </Link>
-                </th>
-                <td style={td}>
-                  {written ? <KeySign of={written} size={20} tone="soft" /> : <Blank words="no key" />}
-                </td>
-                <td style={td} title={mine?.words}>
-                  {mine ? (
-                    <>
-                      <KeySign of={mine.key} size={20} />
-                      <span style={unseen}>{`. ${mine.words}`}</span>
-                    </>
-                  ) : (
-                    <Blank words="not decided" />
-                  )}
-                </td>
-                {voice && scale && (
-                  <>
-                    <td style={td}>
-                      {sung ? (
-                        <SpanBar
-                          voice={voice}
-                          span={sung}
-                          scale={scale}
-                          width={span}
-                          words={spanWords(sung, shownKey(song, mine))}
-                        />
-                      ) : (
-                        <Text variant="tiny" tone="soft">
-                          no melody yet
-                        </Text>
-                      )}
-                    </td>
-                    <td style={{ ...td, font: `600 16px/20px ${fonts.display}` }}>
-                      {fit ?? <Blank words="not known" />}
-                    </td>
-                  </>
-                )}
-                {roomy && (
-                  <td style={td}>
-                    <Text variant="tiny" tone="plum">
-                      {song.tags.join(" · ")}
-                    </Text>
-                  </td>
-                )}
-                <td style={{ ...td, color: colors.inkSoft }}>{playedWords(song.playedAt, new Date())}</td>
-                <td style={{ ...td, padding: 0 }}>
-                  <RowMenuButton song={song} actions={actions} />
-                </td>
+                <SongCells
+                  song={song}
+                  voice={voice}
+                  mineOf={mineOf}
+                  fitOf={fitOf}
+                  actions={actions}
+                  width={span}
+                  roomy={roomy}
+                />
               </tr>
             );
           })}
@@ -196,17 +121,6 @@ function Room({ height }: { height: number }) {
     <tr aria-hidden style={{ height }}>
       <td style={{ padding: 0 }} />
     </tr>
-  );
-}
-
-function Blank({ words }: { words: string }) {
-  return (
-    <>
-      <span aria-hidden style={{ color: colors.inkSoft }}>
-        –
-      </span>
-      <span style={unseen}>{words}</span>
-    </>
   );
 }
 
@@ -229,13 +143,6 @@ const th: CSSProperties = {
   textAlign: "left",
   verticalAlign: "bottom",
   padding: "0 12px 8px 0",
-};
-const td: CSSProperties = {
-  borderBottom: `1px solid ${colors.line}`,
-  padding: "0 12px 0 0",
-  height: 59,
-  verticalAlign: "middle",
-  overflowWrap: "anywhere",
 };
 const sorter: CSSProperties = {
   font: "inherit",

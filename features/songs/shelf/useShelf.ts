@@ -20,6 +20,8 @@ export interface Shelf {
   stale: boolean;
   /** the fit is judged by spans until the notes are read */
   judging: boolean;
+  /** how often scores by notes were made ready */
+  judged: number;
   error: Error | null;
   retry: () => void;
 }
@@ -72,6 +74,7 @@ export function useShelf(
     coming: isFetchingNextPage,
     stale: isPlaceholderData,
     judging: sort === "fit" && voice !== null && judged === 0 && songs !== undefined && songs.some(({ span }) => span),
+    judged,
     error: query.error,
     retry: () => void (isFetchNextPageError ? fetchNextPage() : query.refetch()),
   };

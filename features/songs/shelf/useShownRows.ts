@@ -1,5 +1,5 @@
 import { useWindowVirtualizer, type VirtualItem } from "@tanstack/react-virtual";
-import { useEffect, useLayoutEffect, useRef, useState, useSyncExternalStore } from "react";
+import { useCallback, useEffect, useLayoutEffect, useRef, useState, useSyncExternalStore } from "react";
 
 export interface ShownRows {
   /** of the element that holds the rows */
@@ -18,18 +18,18 @@ const ahead = 30;
 /** The rows of a long list that are in sight, with some to spare; all of them on paper. */
 export function useShownRows(keys: readonly string[], height: number, more: () => void): ShownRows {
   const frame = useRef<HTMLDivElement>(null);
-  const [top, setTop] = useState(0);
+  const top = useTopOf(frame, keys);
   const printing = useSyncExternalStore(onPrint, isPrinting, () => false);
-  useLayoutEffect(() => {
-    const from = (frame.current?.getBoundingClientRect().top ?? 0) + window.scrollY;
-    if (Math.abs(from - top) > 1) setTop(from);
-  });
+  const estimateSize = useCallback(() => height, [height]);
+  const getItemKey = useCallback((index: number) => keys[index] ?? index, [keys]);
   const list = useWindowVirtualizer({
     count: keys.length,
-    estimateSize: () => height,
+    estimateSize,
+    getItemKey,
     overscan: 8,
     scrollMargin: top,
-    getItemKey: (index) => keys[index] ?? index,
+    // Rows come in a render of their own, so that scrolling itself never waits for them.
+    useFlushSync: false,
   });
   const items = list.getVirtualItems();
   const last = items.at(-1)?.index ?? -1;
@@ -55,6 +55,20 @@ export function useShownRows(keys: readonly string[], height: number, more: () =
     after: Math.max(0, list.getTotalSize() - ((items.at(-1)?.end ?? top) - top)),
     measure: list.measureElement,
   };
+}
+
+/** Where the list begins on the page; what stands over it may grow and shrink. */
+function useTopOf(frame: React.RefObject<HTMLDivElement | null>, keys: readonly string[]): number {
+  const [top, setTop] = useState(0);
+  useLayoutEffect(() => {
+    const look = () => setTop(Math.round((frame.current?.getBoundingClientRect().top ?? 0) + window.scrollY));
+    look();
+    if (typeof ResizeObserver === "undefined") return;
+    const watch = new ResizeObserver(look);
+    watch.observe(document.documentElement);
+    return () => watch.disconnect();
+  }, [frame, keys]);
+  return top;
 }
 
 let printing = false;

@@ -64,7 +64,7 @@ const Section = memo(
         {label !== null && (
           <View style={{ flexDirection: "row", alignItems: "center", gap: 10, marginBottom: 8 }}>
             <Heading level={level} size={14} style={{ color: colors.inkSoft, fontWeight: "600", letterSpacing: 0 }}>
-              {label}
+              {label.replace(timesBehind, "×$1")}
             </Heading>
             <View style={{ flexGrow: 1, height: 1, backgroundColor: colors.line }} />
           </View>
@@ -82,6 +82,9 @@ const Section = memo(
     before.section.label === now.section.label &&
     sameLines(before.section.lines, now.section.lines),
 );
+
+/** How often a part comes, behind its name. */
+const timesBehind = /\(?\b[x×]\s?(\d{1,2})\)?$/i;
 
 interface LineProps {
   line: ChartLine;

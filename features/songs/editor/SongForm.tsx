@@ -1,4 +1,4 @@
-import { useRef, useState, type ReactNode, type RefObject } from "react";
+import { useEffect, useRef, useState, type ReactNode, type RefObject } from "react";
 import { View } from "react-native";
 import { Field } from "@/features/ui/Field";
 import { Segmented } from "@/features/ui/Segmented";
@@ -44,6 +44,13 @@ export function SongForm({ edits, reading, errors, mode, onMode, placing, chartB
   const phone = layout === "phone";
   const wide = layout === "wide";
   const [row, setRow] = useState<number | null>(null);
+  useEffect(() => {
+    const follow = () => {
+      if (chartBox.current?.contains(document.activeElement)) setRow(caretRow(chartBox.current));
+    };
+    document.addEventListener("selectionchange", follow);
+    return () => document.removeEventListener("selectionchange", follow);
+  }, [chartBox]);
   const key = draft.key ?? finding?.key ?? null;
   const onText = useRef((text: string) => change({ chart: text })).current;
 
@@ -64,7 +71,7 @@ export function SongForm({ edits, reading, errors, mode, onMode, placing, chartB
     </View>
   );
   const typing = (
-    <div ref={chartBox} onSelect={() => setRow(caretRow(chartBox.current))}>
+    <div ref={chartBox}>
       <Field
         label="Chart, chords over lyrics"
         value={draft.chart}
@@ -102,7 +109,9 @@ export function SongForm({ edits, reading, errors, mode, onMode, placing, chartB
         </Bar>
       )}
       <RespellOffer text={draft.chart} writtenKey={key} onText={onText} />
-      <UnreadSigns signs={chart.unread} onShow={(sign) => onShow(sign.line - 1, sign.column - 1, sign.text.length)} />
+      {(mode !== "parts" || wide) && (
+        <UnreadSigns signs={chart.unread} onShow={(sign) => onShow(sign.line - 1, sign.column - 1, sign.text.length)} />
+      )}
     </View>
   );
   const parts = (
@@ -143,13 +152,22 @@ export function SongForm({ edits, reading, errors, mode, onMode, placing, chartB
       <Columns to={wide ? "minmax(0, 11fr) minmax(0, 10fr) 264px" : "minmax(0, 1fr) minmax(0, 1fr)"}>
         {chartColumn}
         {preview}
-        {wide && parts}
+        {wide && (
+          <View style={{ gap: 24 }}>
+            {parts}
+            {keyCard}
+          </View>
+        )}
       </Columns>
       {!wide && mode === "parts" && parts}
-      <Columns to="minmax(0, 1fr) minmax(0, 1fr)">
-        {keyCard}
-        {tune}
-      </Columns>
+      {wide ? (
+        <View style={{ maxWidth: 760 }}>{tune}</View>
+      ) : (
+        <Columns to="minmax(0, 1fr) minmax(0, 1fr)">
+          {keyCard}
+          {tune}
+        </Columns>
+      )}
     </View>
   );
 }

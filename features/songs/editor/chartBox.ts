@@ -1,5 +1,6 @@
-/** Height of a row in the field of the chart. */
+/** A row and a letter in the field of the chart, in pixels. */
 const rowHeight = 22;
+const letterWidth = 9.6;
 
 function fieldIn(box: HTMLElement | null): HTMLTextAreaElement | null {
   return box?.querySelector("textarea") ?? null;
@@ -14,6 +15,7 @@ export function showInChart(box: HTMLElement | null, row: number, column: number
   field.focus({ preventScroll: true });
   field.setSelectionRange(start, start + length);
   field.scrollTop = Math.max(0, row * rowHeight - field.clientHeight / 3);
+  field.scrollLeft = Math.max(0, column * letterWidth - field.clientWidth / 2);
   field.scrollIntoView({ block: "nearest" });
 }
 

@@ -35,10 +35,11 @@ export function useUndoKeys({ draft, undo, redo }: SongEdits, chartBox: RefObjec
       if (event.inputType === "historyUndo") step(event, true);
       else if (event.inputType === "historyRedo") step(event, false);
     };
-    document.addEventListener("keydown", keys);
+    // On their way down: fields let no key rise any further.
+    document.addEventListener("keydown", keys, true);
     document.addEventListener("beforeinput", menu);
     return () => {
-      document.removeEventListener("keydown", keys);
+      document.removeEventListener("keydown", keys, true);
       document.removeEventListener("beforeinput", menu);
     };
   }, [undo, redo]);

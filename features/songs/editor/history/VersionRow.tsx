@@ -1,6 +1,7 @@
 import { useQuery } from "@tanstack/react-query";
 import { View } from "react-native";
 import { Button } from "@/features/ui/Button";
+import { Heading } from "@/features/ui/Heading";
 import { QueryState } from "@/features/ui/QueryState";
 import { Text } from "@/features/ui/Text";
 import { colors, fonts } from "@/features/ui/theme";
@@ -59,8 +60,18 @@ export function VersionRow({ song, entry, told, open, onOpen, busy, onRestore }:
         <QueryState query={version} title="This version could not be opened">
           {({ song: earlier }) => (
             <View style={{ gap: 16, paddingVertical: 8 }}>
-              <Button small label="Restore this version" busy={busy} onPress={() => onRestore(earlier)} testID="restore" />
+              <Button
+                small
+                label="Restore this version"
+                busy={busy}
+                onPress={() => onRestore(earlier)}
+                testID="restore"
+                style={{ alignSelf: "flex-start" }}
+              />
               <Lines lines={changedLines(earlier.chart, song.chart)} />
+              <Heading level={2} size={16}>
+                As it stood then
+              </Heading>
               <MovedChart song={earlier} to={null} level={3} />
             </View>
           )}

@@ -57,7 +57,7 @@ export function ClashPanel({ base, theirs, draft, onSettled }: ClashPanelProps) 
           />
         ))}
       <View style={{ flexDirection: "row", flexWrap: "wrap", gap: 8 }}>
-        {merge && <Button small label="Put both together" onPress={together} testID="clash-merge" />}
+        {merge && <Button small label={clashes.length === 0 ? "Put both together" : "Keep it like this"} onPress={together} testID="clash-merge" />}
         <Button kind="secondary" small label="Keep mine" onPress={() => onSettled(null, null)} testID="clash-mine" />
         <Button
           kind="secondary"

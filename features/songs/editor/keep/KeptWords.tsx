@@ -1,3 +1,4 @@
+import { View } from "react-native";
 import { LiveText } from "@/features/ui/LiveText";
 import { ApiError } from "@/features/api/apiError";
 import type { KeepState } from "./songKeeper";
@@ -26,8 +27,10 @@ export function keptWords(state: KeepState): string {
 export function KeptWords({ state }: { state: KeepState }) {
   const quiet = state.kind === "kept" || state.kind === "keeping";
   return (
-    <LiveText variant="small" tone={quiet ? "soft" : "honey"} testID="kept-words">
-      {keptWords(state)}
-    </LiveText>
+    <View style={{ flexShrink: 1, flexGrow: 1, minWidth: 0 }}>
+      <LiveText variant="small" tone={quiet ? "soft" : "honey"} testID="kept-words">
+        {keptWords(state)}
+      </LiveText>
+    </View>
   );
 }

@@ -41,7 +41,7 @@ function numbered(text: string, key: KeyName): PaletteChord & { rank: number } {
   const { roman, degree, accidental } = chordNumber(chord, key);
   // Of two on one step the plainer comes first.
   const beside = (accidental === "" ? 0 : 20) + (chord.bass === null ? 0 : 0.5) + chord.quality.length / 20;
-  return { text, roman, rank: order.indexOf(degree) + beside };
+  return { text, roman: roman.replace(/dim/, "°"), rank: order.indexOf(degree) + beside };
 }
 
 function triad(degree: number, key: KeyName): string {

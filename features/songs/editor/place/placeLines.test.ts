@@ -8,9 +8,15 @@ test("a chart as headings, remarks and lines of syllables with their chords", ()
   const line = items[1] as PlaceLine;
   expect(line.words.map((word) => word.map((cell) => [cell.text, cell.chord?.text ?? null]))).toEqual([
     [["Low", "G"]],
-    [["tide", null], [",", "C"]],
-    [["har", null], ["bour", null]],
-    [["", null]],
+    [
+      ["tide", null],
+      [",", "C"],
+    ],
+    [
+      ["har", null],
+      ["bour", null],
+      ["", null],
+    ],
   ]);
 });
 

@@ -73,8 +73,9 @@ function wordsOf(lyrics: string, chords: readonly ChartToken[]): PlaceCell[][] {
     };
     if (inside) words.at(-1)!.push(cell);
     else words.push([cell]);
-    // A piece that ends in the middle of a word goes on in the next one.
-    inside = text !== "" && cell.gap === 0 && (starts[index + 1] ?? 0) < lyrics.trimEnd().length;
+    // A piece that ends in the middle of a word goes on in the next one; the place behind the words stays with the last.
+    const next = starts[index + 1];
+    inside = (text !== "" && cell.gap === 0 && next !== undefined) || next === behind;
   });
   return words;
 }

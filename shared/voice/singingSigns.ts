@@ -1,5 +1,5 @@
 import { weightedQuantile } from "./pitchSpread";
-import { likenessToSpeech } from "./speechLikeness";
+import { speechCues, type SpeechCues } from "./speechCues";
 import type { TrackFrame } from "./pitchTrack";
 import type { HeardNote } from "./sungNotes";
 
@@ -13,8 +13,8 @@ export interface SingingSigns {
   mixedShare: number;
   /** how many different pitches the believed notes have */
   pitches: number;
-  /** below 0 for singing, above 0 for speech */
-  speechLikeness: number;
+  /** what tells speech from singing; null where nothing was held */
+  cues: SpeechCues | null;
   /** pitch stiller than any throat holds it: a string, a pipe, a machine */
   still: boolean;
   /** a nearly pure tone, high up */
@@ -26,6 +26,12 @@ const LOUD_WITHIN_DB = 12;
 const STILL_CENTS = 1.7;
 /** A throat's pitch bends by more than this within 80 ms, through jitter alone (the same singers: from 0.7 up). */
 const FLUTTER_CENTS = 0.6;
+/**
+ * One held note may be held better than a phrase's notes, and nothing else about it can tell a machine: only what is as
+ * still as a generator's tone counts (singers holding as well as they can: from 0.4 and 0.4 up together; tones: 0.4 and 0.2 at most).
+ */
+const STILL_HOLD_CENTS = 0.5;
+const HOLD_FLUTTER_CENTS = 0.3;
 /** Half the stretch, in frames of 10 ms, over which flutter is looked for. */
 const FLUTTER_REACH = 4;
 /** Two notes nearer than this, in semitones, may be the same pitch sung twice. */
@@ -46,9 +52,10 @@ const OCTAVE_LOW_DB = 20;
  *
  * @param frames the track, one frame per 10 ms
  * @param notes its notes, weeded
+ * @param hold the singer was asked to hold single notes
  * @returns the signs; all zero or false where nothing was held
  */
-export function findSigns(frames: readonly TrackFrame[], notes: readonly HeardNote[]): SingingSigns {
+export function findSigns(frames: readonly TrackFrame[], notes: readonly HeardNote[], hold = false): SingingSigns {
   const clear = notes.filter((n) => n.clear);
   const heldS = clear.reduce((sum, n) => sum + n.heldS, 0);
   const levels = frames.map((f) => f.levelDb).sort((a, b) => a - b);
@@ -60,10 +67,15 @@ export function findSigns(frames: readonly TrackFrame[], notes: readonly HeardNo
     voicedShare: of((f) => f.hz !== null),
     mixedShare: of((f) => f.mixed),
     pitches: countPitches(clear),
-    speechLikeness: likenessToSpeech(frames, clear, top - LOUD_WITHIN_DB),
-    still: clear.length > 0 && median(clear.map((n) => n.steadinessCents)) < STILL_CENTS && flutter(frames, clear) < FLUTTER_CENTS,
+    cues: clear.length > 0 ? speechCues(frames, clear, top - LOUD_WITHIN_DB) : null,
+    still: isStill(frames, clear, hold),
     whistled: clear.length > 0 && clear.every((n) => n.midi >= WHISTLE_FROM_MIDI) && isPure(frames),
   };
+}
+
+function isStill(frames: readonly TrackFrame[], clear: readonly HeardNote[], hold: boolean): boolean {
+  const [cents, fluttering] = hold ? [STILL_HOLD_CENTS, HOLD_FLUTTER_CENTS] : [STILL_CENTS, FLUTTER_CENTS];
+  return clear.length > 0 && median(clear.map((n) => n.steadinessCents)) < cents && flutter(frames, clear) < fluttering;
 }
 
 function isPure(frames: readonly TrackFrame[]): boolean {

@@ -1,6 +1,7 @@
 import type { RoomFloor } from "./roomFloor";
 import type { TrackFrame } from "./pitchTrack";
 import { findSigns } from "./singingSigns";
+import { likenessToSpeech } from "./speechLikeness";
 import type { HeardNote } from "./sungNotes";
 import type { Verdict } from "./takeReport";
 
@@ -38,10 +39,11 @@ export function judgeTake(evidence: Evidence): Verdict {
   const { notes, frames, hold, durationS, room } = evidence;
   const loudest = frames.reduce((top, f) => Math.max(top, f.levelDb), -Infinity);
   if (loudest < QUIET_DB) return "too-quiet";
-  const signs = findSigns(frames, notes);
+  const signs = findSigns(frames, notes, hold);
   const enough = hold ? signs.heldS >= LEAST_HELD_IN_HOLD_S : signs.heldS >= LEAST_HELD_S && signs.pitches >= LEAST_PITCHES;
-  if (signs.still || signs.whistled) return "not-singing";
-  const sung = signs.voicedShare >= VOICED_AT_LEAST && (hold || signs.speechLikeness < 0);
+  // One high note on one vowel is as pure as a whistle, which only a line of several can tell.
+  if (signs.still || (signs.whistled && !hold)) return "not-singing";
+  const sung = signs.voicedShare >= VOICED_AT_LEAST && (hold || signs.cues === null || likenessToSpeech(signs.cues) < 0);
   const monotone = signs.pitches < LEAST_PITCHES && signs.voicedShare >= VOICED_AT_LEAST && signs.heldS >= SUNG_LONG_S * notes.filter((n) => n.clear).length;
   if (enough && signs.mixedShare > MIXED_AT_MOST) return "several-voices";
   if (enough && sung) return "heard";

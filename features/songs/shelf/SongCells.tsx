@@ -96,7 +96,9 @@ export const SongCells = memo(function SongCells({
               </Text>
             )}
           </td>
-          <td style={{ ...td, font: `600 16px/20px ${fonts.display}` }}>{fit ?? <Blank words="not known" />}</td>
+          <td data-testid="fit" style={{ ...td, font: `600 16px/20px ${fonts.display}` }}>
+            {fit ?? <Blank words="not known" />}
+          </td>
         </>
       )}
       {roomy && <td style={td}>{tags}</td>}

@@ -125,7 +125,7 @@ const SongRow = memo(function SongRow({
             <View style={{ flexDirection: "row", alignItems: "center", gap: 10 }}>
               <SpanBar voice={voice} span={span} scale={shelfScale(voice)} width={150} words={spanWords(span, key)} />
               {fit !== null && (
-                <Text variant="small" tone="soft">
+                <Text variant="small" tone="soft" testID="fit">
                   {`fit ${fit}`}
                 </Text>
               )}

@@ -125,7 +125,7 @@ export function SongShelf({ view, onView, voice, mineOf }: SongShelfProps) {
         <ShelfTools view={view} songs={songs} total={total} chosen={chosen} onChosen={setChosen} />
       </View>
       {shelf.judging && (
-        <Text variant="tiny" tone="soft">
+        <Text variant="tiny" tone="soft" testID="judging">
           Judged by their spans; the notes are being read.
         </Text>
       )}

@@ -53,11 +53,13 @@ export function tessituragramWords(
 ): string[] {
   const say = (midi: number) => glyphs(noteName(midi, spelling));
   const { lowMidi, highMidi, mean, q1, median, q3 } = figures;
+  // The mean is seldom a note of the scale, so a key with sharps has no say in its name.
+  const centre = glyphs(noteName(mean, spelling === "sharps" ? "common" : spelling));
   const words = [
     `The tune runs from ${say(lowMidi)} to ${say(highMidi)}.`,
     q1 === q3
-      ? `Half of its time or more is spent on ${say(median)}; the mean is near ${say(mean)}.`
-      : `Half of its time lies between ${say(q1)} and ${say(q3)}, the middle at ${say(median)}; the mean is near ${say(mean)}.`,
+      ? `Half of its time or more is spent on ${say(median)}; the mean is near ${centre}.`
+      : `Half of its time lies between ${say(q1)} and ${say(q3)}, the middle at ${say(median)}; the mean is near ${centre}.`,
   ];
   const held = bars.filter(({ heldBeats }) => heldBeats !== null);
   if (held.length > 0)

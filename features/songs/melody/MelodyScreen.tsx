@@ -132,7 +132,7 @@ export function MelodyScreen({ song, voice, instrument, chooser, sing, onKept }:
   return (
     <Screen
       title="Melody"
-      subtitle={song.title}
+      subtitle={wide ? null : song.title}
       crumb={{ label: song.title, href: { pathname: "/songs/[id]", params: { id: song.id } } }}
       wide
       footer={

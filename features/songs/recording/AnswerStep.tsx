@@ -43,7 +43,7 @@ export function AnswerStep({ song, answer, busy, onTake }: AnswerStepProps) {
               ? "The same notes"
               : kind === "mode"
                 ? "Same home note, other mode"
-                : `${distanceWords(nearest)} ${nearest < 0 ? "lower" : "higher"} (${nearest > 0 ? "+" : "−"}${Math.abs(nearest)})`}
+                : `${capital(distanceWords(nearest))} ${nearest < 0 ? "lower" : "higher"} (${nearest > 0 ? "+" : "−"}${Math.abs(nearest)})`}
         </Text>
       </View>
       <View style={{ gap: 8, maxWidth: 640 }} testID="answer-words">
@@ -86,6 +86,10 @@ export function AnswerStep({ song, answer, busy, onTake }: AnswerStepProps) {
       </View>
     </View>
   );
+}
+
+function capital(words: string): string {
+  return words.charAt(0).toUpperCase() + words.slice(1);
 }
 
 function Named({ label, of }: { label: string; of: KeyName }) {

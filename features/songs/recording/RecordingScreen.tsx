@@ -64,7 +64,7 @@ export function RecordingScreen({ song, capoTo, hum, sing }: RecordingScreenProp
   return (
     <Screen
       title="Chart and recording"
-      subtitle={song.title}
+      subtitle={phone ? song.title : null}
       crumb={{ label: song.title, href: { pathname: "/songs/[id]", params: { id: song.id } } }}
       footer={
         next && (

@@ -1,3 +1,6 @@
+import { mkdtempSync, rmSync, writeFileSync } from "node:fs";
+import { tmpdir } from "node:os";
+import { join } from "node:path";
 import type { Page } from "playwright-core";
 import { setStage } from "./stage";
 import { endlessScore, packedScore, twoTrackMidi } from "./tuneFiles";
@@ -7,12 +10,12 @@ const stage = setStage("kept");
 /** Our own eight bars in D, from A3 up to B4. */
 const abc = "X:1\nT:Quay steps\nM:4/4\nL:1/4\nK:D\nD E F A|B2 A2|G F E D|A,4|D E F A|B2 A F|G E F E|D4|]\n";
 
-async function give(page: Page, name: string, bytes: Buffer): Promise<void> {
+async function give(page: Page, file: string | { name: string; buffer: Buffer }): Promise<void> {
   const [chooser] = await Promise.all([
     page.waitForEvent("filechooser"),
     page.getByRole("button", { name: /Choose (a|another) file/ }).click(),
   ]);
-  await chooser.setFiles({ name, mimeType: "application/octet-stream", buffer: bytes });
+  await chooser.setFiles(typeof file === "string" ? file : { mimeType: "application/octet-stream", ...file });
 }
 
 test.each(["phone", "wide"] as const)(
@@ -23,7 +26,7 @@ test.each(["phone", "wide"] as const)(
     await page.getByTestId("song-title").fill("Quay Steps");
     await page.getByRole("radio", { name: /^From a file/ }).click();
 
-    await give(page, "steps.mid", Buffer.from("no melody at all"));
+    await give(page, { name: "steps.mid", buffer: Buffer.from("no melody at all") });
     await page
       .getByTestId("melody-refusal")
       .getByText(/no MIDI file/)
@@ -31,11 +34,11 @@ test.each(["phone", "wide"] as const)(
     expect(await page.getByTestId("song-title").inputValue()).toBe("Quay Steps");
 
     // Two tracks: the voice is proposed, and the page says why.
-    await give(page, "lanterns.mid", twoTrackMidi());
+    await give(page, { name: "lanterns.mid", buffer: twoTrackMidi() });
     await page.getByText(/11 notes, D4 to A4, from lanterns.mid, Voice/).waitFor();
     const voice = page.getByRole("radio", { name: /^Voice \(likely the sung one\)/ });
     expect(await voice.getAttribute("aria-checked")).toBe("true");
-    await voice.getByText(/It has words\..*Its name says “Voice”\..*one note at a time/).waitFor();
+    await voice.getByText(/It has words\. It has one note at a time\. Its name says “Voice”\./).waitFor();
     await page
       .getByRole("radio", { name: /^Piano/ })
       .getByText(/Its name says “Piano”\.|several notes at once/)
@@ -53,12 +56,16 @@ test.each(["phone", "wide"] as const)(
     await page.getByRole("button", { name: "Hear the melody" }).waitFor();
 
     await page.getByRole("button", { name: "Put the words into the chart" }).click();
-    await page.waitForFunction(() => document.body.innerText.includes("Lanterns on the quay, low tide away to sea."));
+    await page.waitForFunction(() =>
+      [...document.querySelectorAll("textarea")].some(
+        (field) => field.value === "Lanterns on the quay, low tide away to sea.",
+      ),
+    );
 
     // Compressed MusicXML, then ABC; the last one is kept with the song.
-    await give(page, "quay.mxl", packedScore());
+    await give(page, { name: "quay.mxl", buffer: packedScore() });
     await page.getByText(/11 notes, D4 to A4, from quay.mxl/).waitFor();
-    await give(page, "steps.abc", Buffer.from(abc));
+    await give(page, { name: "steps.abc", buffer: Buffer.from(abc) });
     await page.getByText(/23 notes, A3 to B4/).waitFor();
     await page.getByTestId("save-song").click();
     await page.getByRole("heading", { level: 1, name: "Quay Steps" }).waitFor();
@@ -69,7 +76,7 @@ test.each(["phone", "wide"] as const)(
 );
 
 /** Longest stretch in ms for which the page answered to nothing while it read a file that is refused after long work. */
-async function longestBlock(page: Page): Promise<number> {
+async function longestBlock(page: Page, path: string): Promise<number> {
   await page.evaluate(() => {
     const seen: number[] = [];
     Object.assign(window, { longTasks: seen });
@@ -77,7 +84,7 @@ async function longestBlock(page: Page): Promise<number> {
       type: "longtask",
     });
   });
-  await give(page, "endless.musicxml", endlessScore());
+  await give(page, path);
   await page
     .getByTestId("melody-refusal")
     .getByText(/repeats|too many|larger/)
@@ -86,13 +93,18 @@ async function longestBlock(page: Page): Promise<number> {
 }
 
 test("a file of 5 MB is read beside the page, which stays awake meanwhile", async () => {
+  const folder = mkdtempSync(join(tmpdir(), "tune-"));
+  // A file of the disk reaches the page as it would from a person; one from memory would keep the page busy itself.
+  const path = join(folder, "endless.musicxml");
+  writeFileSync(path, endlessScore());
   const { context, page, errors } = await stage.open("none", "phone");
   await page.goto("/songs/new");
   await page.getByRole("radio", { name: /^From a file/ }).click();
   // Other programs may disturb a single measurement; a page that reads by itself is blocked every time.
   const blocks: number[] = [];
-  while (blocks.length < 3 && Math.min(...blocks, Infinity) >= 100) blocks.push(await longestBlock(page));
+  while (blocks.length < 3 && Math.min(...blocks, Infinity) >= 100) blocks.push(await longestBlock(page, path));
   expect(Math.min(...blocks)).toBeLessThan(100);
   expect(errors).toEqual([]);
   await context.close();
+  rmSync(folder, { recursive: true, force: true });
 }, 60_000);

@@ -178,3 +178,59 @@ describe("ABC (standard 2.1)", () => {
     );
   });
 });
+
+describe("ABC tunes in full", () => {
+  const voiceOf = (body: string, head = "L:1/4\nM:4/4\nK:C") => sung(read("x.abc", `X:1\n${head}\n${body}\n`));
+  const pitches = (body: string, head?: string) => voiceOf(body, head).melody.notes.map(({ midi }) => midi);
+
+  test.each([
+    ["a second time through two endings", "|:C|1,3 D:|2 E:|4 F|]", [60, 62, 60, 64, 60, 62, 60, 65]],
+    ["three times", "|::C|D::|E|]", [60, 62, 60, 62, 60, 62, 64]],
+    ["from the latest double bar, where no beginning stands", "C|D||E|F:|G|]", [60, 62, 64, 65, 64, 65, 67]],
+  ])("repeats %s", (_, body, expected) => expect(pitches(body)).toEqual(expected));
+
+  test("parts are played in the order of the head", () => {
+    expect(pitches("P:A\nC|\nP:B\nD|", "P:(AB)2A\nL:1/4\nK:C")).toEqual([60, 62, 60, 62, 60]);
+  });
+
+  test.each([
+    ["octave=-1", "K:C octave=-1", 48],
+    ["transpose=-2", "K:C transpose=-2", 58],
+    ["a bass clef, which moves nothing", "K:C bass", 60],
+    ["clef=treble+8", "K:C clef=treble+8", 72],
+    ["V: with an octave of its own", "K:C\nV:1 octave=1", 72],
+  ])("%s is heard as it sounds", (_, key, expected) => expect(pitches("C", `L:1/4\n${key}`)).toEqual([expected]));
+
+  test.each([
+    ["K:D phr ^F", [65 + 1, 59 + 12 - 1, 63]],
+    ["K:C exp _B", [65, 70, 64]],
+    ["K:HP", [66, 71, 64]],
+    ["K:E dor", [66, 71, 64]],
+    ["K:none", [65, 71, 64]],
+  ])("the signature of %s", (key, expected) => expect(pitches("FBE", `L:1/4\n${key}`)).toEqual(expected));
+
+  test("words: melisma, skipped notes, joined words, bars passed over, verses in turn", () => {
+    const { lyrics } = voiceOf("|:CDEF|G2 A2:|\nw:low_ * tide~and | har-bour\nw:high * * moon | far lights");
+    expect(lyrics?.map(({ start, text }) => [start, text])).toEqual([
+      [0, "low"],
+      [3, "tide and"],
+      [4, "har-"],
+      [6, "bour"],
+      [8, "high"],
+      [11, "moon"],
+      [12, "far"],
+      [14, "lights"],
+    ]);
+    expect(lyrics?.filter(({ newLine }) => newLine).map(({ text }) => text)).toEqual(["low", "high"]);
+  });
+
+  test("speed, metre, and the default length that follows from it", () => {
+    const file = read("x.abc", "X:1\nM:2/4\nQ:3/8=60\nK:C\nCD\n");
+    expect([file.tempo, file.beatsPerBar]).toEqual([90, 2]);
+    expect(sung(file).melody.notes[0]!.duration).toBe(0.25);
+  });
+
+  test("blocks of text and comments are no music", () => {
+    expect(pitches("C % D\n%%begintext\nEFG\n%%endtext\n% A\nB")).toEqual([60, 71]);
+  });
+});

@@ -3,7 +3,7 @@ import * as sounds from "../sound/noSinging";
 import { singPhrase } from "../sound/singer";
 import { makeMicrophones } from "./microphone";
 import { setStage } from "./stage";
-import { singFor, sungUpTo } from "./singing";
+import { singFor } from "./singing";
 
 const rate = 44_100;
 const microphones = makeMicrophones();
@@ -61,19 +61,43 @@ test.each([
   expect(errors).toEqual([]);
 });
 
-/** Takes the sound away as a browser does: what the page is told is the same, only the cause is the test. */
-async function interrupt(page: Page, how: "hidden" | "ended"): Promise<void> {
-  await page.evaluate((cause) => {
-    if (cause === "hidden") {
-      Object.defineProperty(document, "hidden", { configurable: true, get: () => true });
-      document.dispatchEvent(new Event("visibilitychange"));
-      return;
-    }
-    const { heldTrack: track } = window as unknown as { heldTrack: MediaStreamTrack };
-    track.stop();
-    track.dispatchEvent(new Event("ended"));
-  }, how);
+/**
+ * Takes the sound away as a browser does, at the very moment when the page has counted so many seconds: what the page is
+ * told is the same, only the cause is the test.
+ */
+async function interruptAt(page: Page, seconds: number, how: Interruption): Promise<void> {
+  await page.evaluate(
+    ([at, cause]) => {
+      const interrupt = () => {
+        if (cause === "hidden") {
+          Object.defineProperty(document, "hidden", { configurable: true, get: () => true });
+          document.dispatchEvent(new Event("visibilitychange"));
+          return;
+        }
+        const { heldTrack: track, heldContext: context } = window as unknown as {
+          heldTrack: MediaStreamTrack;
+          heldContext: AudioContext;
+        };
+        if (cause === "call") void context.suspend();
+        else if (cause === "muted") track.dispatchEvent(new Event("mute"));
+        else {
+          track.stop();
+          track.dispatchEvent(new Event("ended"));
+        }
+      };
+      const watch = new MutationObserver(() => {
+        const shown = document.querySelector('[data-testid="take-seconds"]')?.textContent ?? "0";
+        if (Number.parseInt(shown, 10) < at) return;
+        watch.disconnect();
+        interrupt();
+      });
+      watch.observe(document, { subtree: true, childList: true, characterData: true });
+    },
+    [seconds, how] as const,
+  );
 }
+
+type Interruption = "hidden" | "ended" | "muted" | "call";
 
 async function holdTrack(page: Page): Promise<void> {
   await page.addInitScript(() => {
@@ -83,20 +107,26 @@ async function holdTrack(page: Page): Promise<void> {
       Object.assign(window, { heldTrack: stream.getAudioTracks()[0] });
       return stream;
     };
+    const connect = AudioContext.prototype.createMediaStreamSource;
+    AudioContext.prototype.createMediaStreamSource = function (stream) {
+      Object.assign(window, { heldContext: this });
+      return connect.call(this, stream);
+    };
   });
 }
 
 describe.each([
   ["hidden", "This page went into the background"],
   ["ended", "The microphone was unplugged or switched off"],
+  ["muted", "The microphone was muted"],
+  ["call", "A call or another program took the microphone"],
 ] as const)("a take that is interrupted (%s)", (how, words) => {
   test("keeps what was sung until then", async () => {
     const { page } = await open(microphones.voice(55).wav);
     await holdTrack(page);
     await page.goto("/voice/sing");
+    await interruptAt(page, 7, how);
     await page.getByTestId("sing-start").click();
-    await sungUpTo(page, 7);
-    await interrupt(page, how);
     expect(await page.getByTestId("take-broken-off").textContent()).toContain(words);
     await page.getByTestId("comfort-notes").waitFor();
     await page.getByTestId("sing-keep").click();
@@ -107,9 +137,8 @@ describe.each([
     const { page } = await open(microphones.voice(55).wav);
     await holdTrack(page);
     await page.goto("/voice/sing");
+    await interruptAt(page, 1, how);
     await page.getByTestId("sing-start").click();
-    await sungUpTo(page, 1);
-    await interrupt(page, how);
     expect(await page.getByTestId("take-failure-interrupted").textContent()).toContain(words);
   });
 });

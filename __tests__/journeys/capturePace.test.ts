@@ -44,38 +44,36 @@ test("the main thread has no long task in 8 s of listening", async () => {
   expect(all.at(-1)).toEqual([]);
 }, 120_000);
 
-test("a note is on the screen within 80 ms of its arrival from the device", async () => {
+const tuneOfNotes = [
+  ...[[64, "E4"] as const, [60, "C4"] as const, [67, "G4"] as const, [65, "F4"] as const, [52, "E3"] as const],
+  ...[[53, "F3"] as const, [69, "A4"] as const, [48, "C3"] as const, [57, "A3"] as const],
+];
+
+test("every note is on the screen within 80 ms of its arrival from the device", async () => {
   const { page } = await stage.open("none");
   await singSynthetically(page);
   await warm(page);
-  const medians: number[] = [];
+  const best = new Map<string, number>();
+  let trial = 0;
   do {
     await page.getByTestId("sing-again").click();
     await sungUpTo(page, 2);
     const times = [];
-    for (const [midi, name] of [
-      [64, "E4"],
-      [60, "C4"],
-      [67, "G4"],
-      [65, "F4"],
-      [52, "E3"],
-      [53, "F3"],
-      [69, "A4"],
-      [48, "C3"],
-      [57, "A3"],
-    ] as const) {
-      times.push(await timeNote(page, midi, name));
+    for (const [midi, name] of tuneOfNotes) {
+      const time = await timeNote(page, midi, name);
+      times.push(time);
+      best.set(name, Math.min(best.get(name) ?? Infinity, time.screenMs));
       await page.waitForTimeout(300 + 37 * times.length);
     }
     const screen = times.map(({ screenMs }) => screenMs);
     say(
       `Note to screen beyond the device, ms: ${screen.map(Math.round).join(" ")} (median ${Math.round(median(screen))}); device ${times.map(({ deviceMs }) => Math.round(deviceMs)).join(" ")}`,
     );
-    medians.push(median(screen));
+    trial += 1;
     await page.getByTestId("sing-stop").click();
     await page.getByTestId("sing-again").waitFor();
-  } while (Math.min(...medians) > screenBarMs && medians.length < trials);
-  expect(Math.min(...medians)).toBeLessThanOrEqual(screenBarMs);
+  } while ([...best.values()].some((ms) => ms > screenBarMs) && trial < trials);
+  expect([...best].filter(([, ms]) => ms > screenBarMs)).toEqual([]);
 }, 120_000);
 
 test("the result of a 20 s phrase stands within 300 ms of its end", async () => {

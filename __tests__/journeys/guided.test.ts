@@ -43,11 +43,16 @@ test("a stranger hums, goes down and up by the tones, says what is for songs, an
   await hum(page);
   await goOn(page, "guided-turn");
   expect(await page.getByTestId("guided-turn").textContent()).toContain("C3");
-  await page.getByTestId("guided-up").click();
+  // A reload loses nothing: the way goes on from where it was.
+  await page.reload();
+  expect(await page.getByTestId("guided-paused").textContent()).toMatch(/loaded again.*C3 to G3/);
+  await page.getByTestId("guided-resume").click();
   await goOn(page, "guided-result");
   expect(await page.getByTestId("guided-reach").textContent()).toBe("C3 to E4");
   expect(await page.getByTestId("guided-sing-high").textContent()).toBe("C♯4");
   await page.getByTestId("guided-sing-high-down").click();
+  await page.reload();
+  expect(await page.getByTestId("guided-reach").textContent()).toBe("C3 to E4");
   expect(await page.getByTestId("guided-sing-high").textContent()).toBe("C4");
   await page.getByRole("radio", { name: "2", exact: true }).click();
   await page.getByTestId("guided-keep").click();

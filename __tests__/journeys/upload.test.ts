@@ -4,6 +4,8 @@ import { join } from "node:path";
 import type { Page } from "playwright-core";
 import { glyphs, noteName } from "../../shared/music/pitch";
 import type { Viewport } from "./browser";
+import { speech } from "../sound/noSinging";
+import { writeWav } from "../sound/wavFile";
 import { makeMicrophones } from "./microphone";
 import { setStage } from "./stage";
 
@@ -127,6 +129,24 @@ describe("what cannot be used is refused with the reason", () => {
     await context.close();
   });
 
+  test.each(["wav", "m4a"])("a shout that the microphone cut off is told as such in a %s too", async (kind) => {
+    const shout = join(microphones.folder, "shout.wav");
+    const said = speech("The ferry leaves the quay at half past nine, and the lanterns are lit before it comes back.");
+    if (!said) throw new Error("espeak-ng is missing: apt-get install espeak-ng");
+    writeWav(
+      shout,
+      said.pcm.map((x) => Math.max(-1, Math.min(1, 100 * x))),
+      said.sampleRate,
+    );
+    // Another rate and another code round the flat tops off.
+    const path = at(`shout-48.${kind}`);
+    execFileSync("ffmpeg", ["-v", "error", "-y", "-i", shout, "-ar", "48000", path]);
+    const { context, page } = await open();
+    await choose(page, path);
+    await page.getByTestId("take-failure-clipped").waitFor();
+    await context.close();
+  });
+
   test("a recording without singing gets the same refusal as a take", async () => {
     const path = microphones.silence();
     const { context, page } = await open();
@@ -155,7 +175,16 @@ test("a long recording says what is being done, and can be given up", async () =
   execFileSync("ffmpeg", ["-v", "error", "-y", ...many, path]);
   const { context, page } = await open("wide");
   await choose(page, path);
-  await page.getByText(/^Listening to 9 min \d+ s of sound$/).waitFor();
+  // The three steps, and how far the last one is.
+  await page.getByText("Reading the file: done").waitFor();
+  await page.getByText("Turning it into sound: done").waitFor({ timeout: 60_000 });
+  await page.getByText(/^Listening: (\d+ min )?\d+ s of 9 min \d+ s$/).waitFor();
+  const share = () => page.getByRole("progressbar").getAttribute("aria-valuenow").then(Number);
+  const first = await share();
+  await page.waitForFunction(
+    (before) => Number(document.querySelector('[role="progressbar"]')?.getAttribute("aria-valuenow")) > before,
+    first,
+  );
   await page.getByTestId("upload-cancel").click();
   await page.getByTestId("upload-choose").waitFor();
   // The worker that was busy is gone: another recording is read at once.

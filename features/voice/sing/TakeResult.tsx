@@ -38,7 +38,9 @@ export function TakeResult({ take, onAgain, onSongs, onFelt, trail }: TakeResult
   };
   const heading = <BandHeading label="Your comfortable notes" band={voice.comfort} />;
   const ladder = <VoiceLadder voice={voice} times={timeOnNotes(report.notes, report.tuningCents)} ends="held" />;
-  const words = <ResultWords take={take} onAgain={onAgain} onSongs={onSongs} onFelt={onFelt} trail={trail} />;
+  const words = (
+    <ResultWords take={take} onAgain={onAgain} onSongs={onSongs} onFelt={onFelt} trail={wide ? null : trail} />
+  );
   if (!wide) {
     return (
       <View style={{ gap: 14 }}>
@@ -50,7 +52,10 @@ export function TakeResult({ take, onAgain, onSongs, onFelt, trail }: TakeResult
   }
   return (
     <View style={{ flexDirection: "row", gap: 64, alignItems: "flex-start" }}>
-      {ladder}
+      <View style={{ gap: 28, width: 460 }}>
+        {ladder}
+        {trail}
+      </View>
       <View style={{ gap: 20, flexGrow: 1, flexBasis: 0, maxWidth: 560 }}>
         {heading}
         {words}

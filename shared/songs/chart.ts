@@ -18,7 +18,7 @@ export type ChartLine =
   | { kind: "blank"; text: string };
 
 /** A verse, a chorus …; label null for what stands before the first heading. */
-export interface ChartSection {
+interface ChartSection {
   label: string | null;
   /** the heading's line as written; null without heading, or where it stands on the first line of chords */
   heading: string | null;

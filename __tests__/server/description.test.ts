@@ -77,6 +77,7 @@ it("makes its schemas from the contracts", async () => {
   expect(Object.keys(schemas).sort()).toEqual(
     [
       "Account",
+      "ChartPdfRequest",
       "Decision",
       "Health",
       "OpenApi",

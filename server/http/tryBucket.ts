@@ -1,0 +1,48 @@
+import { RateLimiterPostgres, RateLimiterRes } from "rate-limiter-flexible";
+import type { DataSource } from "typeorm";
+import { HttpProblem } from "./httpProblem";
+
+const quarterHourS = 900;
+
+/** Allows so many tries by one key in so many seconds; the count is shared by all servers on the database. */
+export class TryBucket {
+  private readonly limiter: RateLimiterPostgres;
+
+  constructor(dataSource: DataSource, keyPrefix: string, points: number, duration = quarterHourS) {
+    this.limiter = new RateLimiterPostgres({
+      storeClient: dataSource,
+      storeType: "typeorm",
+      tableName: "tries",
+      tableCreated: true,
+      clearExpiredByTimeout: true,
+      keyPrefix,
+      points,
+      duration,
+    });
+  }
+
+  /** Counts a try, and refuses one too many. */
+  async take(key: string): Promise<void> {
+    try {
+      await this.limiter.consume(key);
+    } catch (error) {
+      if (!(error instanceof RateLimiterRes)) throw error;
+      const minutes = Math.max(1, Math.ceil(error.msBeforeNext / 60_000));
+      throw new HttpProblem(
+        429,
+        "too-many-tries",
+        `That was tried too often. Try again in ${minutes === 1 ? "a minute" : `${minutes} minutes`}.`,
+        undefined,
+        { "Retry-After": String(Math.max(1, Math.ceil(error.msBeforeNext / 1000))) },
+      );
+    }
+  }
+
+  async forgive(key: string): Promise<void> {
+    await this.limiter.delete(key);
+  }
+
+  async giveBack(key: string): Promise<void> {
+    await this.limiter.reward(key, 1);
+  }
+}

@@ -49,6 +49,7 @@ export function tempoOfTaps(taps: readonly number[]): TappedTempo | null {
 
 /** Names of the parts that can be marked. */
 export const partNames = ["Intro", "Verse", "Chorus", "Bridge", "Solo", "Outro"] as const;
+/** One of them. */
 export type PartName = (typeof partNames)[number];
 
 /** A part that began at a moment while somebody listened. */

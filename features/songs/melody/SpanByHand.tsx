@@ -38,6 +38,11 @@ export interface SpanByHandProps {
   tried: boolean;
 }
 
+const explained =
+  "Write a note with its octave (C4 is the C in the middle of a piano), or a step of the scale counted from the home " +
+  "note: 1 is home, 5 the fifth step over it. A comma puts a step an octave lower, so 5, is the fifth step below home; " +
+  "a stroke puts it higher, so 1' is home an octave up. You can also write 5 below home.";
+
 /** Home note, lowest and highest note, by name or as steps of the scale. */
 export function SpanByHand({ texts, onChange, tried }: SpanByHandProps) {
   const reading = readSpan(texts);
@@ -69,9 +74,7 @@ export function SpanByHand({ texts, onChange, tried }: SpanByHandProps) {
         {field("high", "Highest note", "Such as D5 or 1'")}
       </View>
       <Text variant="small" tone="soft">
-        Write a note with its octave (C4 is the C in the middle of a piano), or a step of the scale counted from the
-        home note: 1 is home, 5 the fifth step over it. A comma puts a step an octave lower, so 5, is the fifth step
-        below home; a stroke puts it higher, so 1' is home an octave up. You can also write 5 below home.
+        {explained}
       </Text>
     </View>
   );

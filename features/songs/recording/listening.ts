@@ -2,7 +2,7 @@ import type { Mode } from "@/shared/music/keyName";
 import type { PartMark, PartName } from "@/shared/songs/formSketch";
 
 /** How the recording's home note was found. */
-export type HomeSource = "hummed" | "sung" | "tapped" | "named";
+type HomeSource = "hummed" | "sung" | "tapped" | "named";
 
 /** What somebody has noted while listening. Times in seconds. */
 export interface Listening {

@@ -5,7 +5,7 @@ export interface WordPlace {
   verses: (WordSyllable | null)[];
 }
 /** A syllable as it stands in a w: line. */
-export interface WordSyllable {
+interface WordSyllable {
   text: string;
   newLine: boolean;
 }

@@ -1,13 +1,13 @@
 import { decodeText } from "./textBytes";
 
 /** A note of a MIDI track, in ticks. */
-export interface MidiNote {
+interface MidiNote {
   tick: number;
   ticks: number;
   midi: number;
 }
 /** A track of a MIDI file: what sounds, by channel 0 to 15, and what is said, in ticks. */
-export interface MidiTrack {
+interface MidiTrack {
   name: string;
   channels: Map<number, { notes: MidiNote[]; program: number | null }>;
   /** meta events 1 (text) and 5 (lyric) */

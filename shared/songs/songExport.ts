@@ -109,7 +109,7 @@ function standsAlone(lines: readonly string[], first: number): boolean {
   const [opening] = parseChart(line).sections;
   if (opening?.heading !== null || opening.lines[0]?.kind !== "lyrics") return false;
   const next = rest[0] ?? "";
-  return /^\s*(?:=+|-+|~+|_+)?\s*$/.test(next) || parseChart(next).sections[0]?.heading != null;
+  return /^\s*(?:=+|-+|~+|_+)?\s*$/.test(next) || (parseChart(next).sections[0]?.heading ?? null) !== null;
 }
 
 /** Without the one blank line after the head and the line break at the end. */

@@ -54,7 +54,7 @@ export function DoneBar({ actions: { notice, error, dismiss } }: { actions: Song
             {words}
           </Text>
           {!error && notice?.undo && <Button kind="text" small label="Undo" onPress={notice.undo} testID="undo" />}
-          {!error && notice?.open != null && (
+          {!error && notice !== null && notice.open !== null && (
             <LinkButton
               kind="text"
               small

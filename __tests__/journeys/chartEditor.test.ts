@@ -1,4 +1,5 @@
 import type { Page } from "playwright-core";
+import { axeFaults } from "./axeFaults";
 import type { Viewport } from "./browser";
 import { signInAsMaren } from "./signIn";
 import { setStage } from "./stage";
@@ -38,7 +39,11 @@ async function offSyllable(page: Page, chord: string, words: string): Promise<nu
 }
 
 const chart = (page: Page) => page.getByTestId("song-chart").inputValue();
-const kept = (page: Page) => page.getByTestId("kept-words").getByText(/^Kept \d\d:\d\d$/).waitFor();
+const kept = (page: Page) =>
+  page
+    .getByTestId("kept-words")
+    .getByText(/^Kept \d\d:\d\d$/)
+    .waitFor();
 const mode = (page: Page, name: string) => page.getByRole("radio", { name, exact: true }).click();
 
 async function writeSong(page: Page, viewport: Viewport): Promise<void> {
@@ -69,6 +74,7 @@ async function placeByTouch(page: Page): Promise<void> {
   await page.getByRole("button", { name: "“har” of harbour, line 3" }).waitFor();
   await page.getByTestId("redo").click();
   await page.getByRole("button", { name: "D over “har” of harbour, line 3" }).waitFor();
+  expect(await axeFaults(page)).toEqual([]);
   await mode(page, "Type");
 }
 
@@ -88,6 +94,13 @@ test.each(["phone", "wide"] as const)(
     await page.getByTestId("kept-words").waitFor();
     expect(await chart(page)).toBe(placed);
 
+    if (viewport === "phone") await mode(page, "Parts");
+    await page.getByTestId("part-name-1").click();
+    await page.getByTestId("once-more").click();
+    expect(await axeFaults(page)).toEqual([]);
+    if (viewport === "phone") await mode(page, "Type");
+    expect(await chart(page)).toContain("\n[Chorus] x3\n");
+
     await page.getByTestId("song-title").fill("Slack Water, slower");
     await page.getByTestId("song-title").press("Control+z");
     expect(await page.getByTestId("song-title").inputValue()).toBe("Slack Water");
@@ -97,6 +110,8 @@ test.each(["phone", "wide"] as const)(
     await page.getByTestId("to-history").click();
     await page.getByTestId("version").first().waitFor();
     await page.getByTestId("look-at-version").last().click();
+    await page.getByTestId("restore").waitFor();
+    expect(await axeFaults(page)).toEqual([]);
     await page.getByTestId("restore").click();
     await page.getByTestId("restored").waitFor();
     await page.goto(page.url().replace(/history$/, "edit"));
@@ -123,6 +138,7 @@ test("two tabs at one song: the second is told, both changes go together, and no
   await kept(page);
   await other.getByTestId("song-chart").fill(`${before}\nand home again`);
   await other.getByTestId("clash").waitFor();
+  expect(await axeFaults(other)).toEqual([]);
   expect(await other.getByTestId("clash").textContent()).toMatch(/Both changes fit together/);
   await other.getByTestId("clash-merge").click();
   await kept(other);

@@ -102,23 +102,22 @@ const Line = memo(
       <DrawnLine {...drawn} />
     );
   },
-  (before, now) =>
-    before.size === now.size && before.marked === now.marked && sameLine(before.line, now.line),
+  (before, now) => before.size === now.size && before.marked === now.marked && sameLine(before.line, now.line),
 );
 
 /** A bar beside the line that stands outside of it, so that nothing moves. */
 const markStyle: CSSProperties = { boxShadow: `-7px 0 0 0 ${colors.paper}, -10px 0 0 0 ${colors.plum}` };
 
 function DrawnLine({ line, size }: Omit<LineProps, "marked">) {
-    if (line.kind === "blank") return <div style={{ height: size * 0.8 }} />;
-    if (line.kind === "comment")
-      return (
-        <Text variant="small" tone="soft" style={{ fontStyle: "italic", marginBottom: 4 }}>
-          {line.text.trim()}
-        </Text>
-      );
-    if (line.kind === "lyrics") return <Row lyrics={line.lyrics} chords={[]} size={size} />;
-    return <Row lyrics={line.kind === "sung" ? line.lyrics : ""} chords={line.chords} size={size} />;
+  if (line.kind === "blank") return <div style={{ height: size * 0.8 }} />;
+  if (line.kind === "comment")
+    return (
+      <Text variant="small" tone="soft" style={{ fontStyle: "italic", marginBottom: 4 }}>
+        {line.text.trim()}
+      </Text>
+    );
+  if (line.kind === "lyrics") return <Row lyrics={line.lyrics} chords={[]} size={size} />;
+  return <Row lyrics={line.kind === "sung" ? line.lyrics : ""} chords={line.chords} size={size} />;
 }
 
 const wholes: CSSProperties = { display: "flex", flexWrap: "wrap", alignItems: "flex-end", marginBottom: 3 };

@@ -9,9 +9,7 @@ test("a chord goes on a line that has none, and over a line that has some", () =
   expect(placeChord(verse, { row: 4, column: 4 }, "Em")).toBe(
     "Verse\nG       C\nLow tide and still\n\n    Em\nthe gulls go by",
   );
-  expect(placeChord(verse, { row: 2, column: 4 }, "D")).toBe(
-    "Verse\nG   D   C\nLow tide and still\n\nthe gulls go by",
-  );
+  expect(placeChord(verse, { row: 2, column: 4 }, "D")).toBe("Verse\nG   D   C\nLow tide and still\n\nthe gulls go by");
 });
 
 test("a chord at the very place is replaced, its brackets stay", () => {
@@ -47,17 +45,15 @@ test("a nudged chord stops beside its neighbour and at the start of the line", (
 
 const chords = ["G", "C", "Am7", "F#m7b5", "Bb/D", "D"];
 const words = ["low", "tide", "and", "harbour", "the", "lantern", "homecoming", "I"];
-const line = fc
-  .array(fc.constantFrom(...words), { minLength: 2, maxLength: 7 })
-  .chain((each) => {
-    const lyrics = each.join(" ");
-    return fc
-      .uniqueArray(fc.tuple(fc.constantFrom(...syllableStarts(lyrics)), fc.constantFrom(...chords)), {
-        selector: ([column]) => column,
-        maxLength: 4,
-      })
-      .map((placed) => ({ lyrics, placed }));
-  });
+const line = fc.array(fc.constantFrom(...words), { minLength: 2, maxLength: 7 }).chain((each) => {
+  const lyrics = each.join(" ");
+  return fc
+    .uniqueArray(fc.tuple(fc.constantFrom(...syllableStarts(lyrics)), fc.constantFrom(...chords)), {
+      selector: ([column]) => column,
+      maxLength: 4,
+    })
+    .map((placed) => ({ lyrics, placed }));
+});
 
 /** A chart made of placed chords alone, and what was put where. */
 const chart = fc.array(line, { minLength: 1, maxLength: 4 }).map((lines) =>
@@ -89,7 +85,9 @@ function over(text: string, row: number): string[] {
   return found.chords.map(({ column, text: sign }) => `${sign}>${found.lyrics.slice(column).replace(/\s+/g, "")}`);
 }
 const plainWords = (text: string) =>
-  rowedLines(parseChart(text)).flatMap(({ line: each }) => ("lyrics" in each ? [each.lyrics.replace(/\s+/g, " ")] : []));
+  rowedLines(parseChart(text)).flatMap(({ line: each }) =>
+    "lyrics" in each ? [each.lyrics.replace(/\s+/g, " ")] : [],
+  );
 
 test("placing changes no word and moves no other chord off its syllable; taking away again leaves the rest", () => {
   fc.assert(

@@ -134,7 +134,9 @@ function lineAt(text: string, row: number): FoundLine | null {
   if (!found) return null;
   const { chordRow, wordRow } = found;
   for (const each of [chordRow, wordRow]) if (each !== null) rows[each] = expandTabs(rows[each] ?? "");
-  const [again] = rowedLines(parseChart([chordRow, wordRow].flatMap((at) => (at === null ? [] : [rows[at]])).join("\n")));
+  const [again] = rowedLines(
+    parseChart([chordRow, wordRow].flatMap((at) => (at === null ? [] : [rows[at]])).join("\n")),
+  );
   return {
     rows,
     chordRow,
@@ -206,7 +208,6 @@ function lay(runs: readonly Run[], lyrics: string): { written: string; words: st
 
 /** The last place between two words that lies behind one column and not behind another; null if there is none. */
 function gapBetween(words: string, after: number, upTo: number): number | null {
-  for (let place = upTo; place > after; place -= 1)
-    if (words[place - 1] === " " || words[place] === " ") return place;
+  for (let place = upTo; place > after; place -= 1) if (words[place - 1] === " " || words[place] === " ") return place;
   return null;
 }

@@ -35,7 +35,13 @@ test("what stands before the first heading stays first", () => {
 });
 
 test("a copy of a numbered part gets the next free number", () => {
-  expect(chartParts(copyPart(song, 1)!).map(({ name }) => name)).toEqual([null, "Verse 1", "Verse 2", "Chorus", "Outro"]);
+  expect(chartParts(copyPart(song, 1)!).map(({ name }) => name)).toEqual([
+    null,
+    "Verse 1",
+    "Verse 2",
+    "Chorus",
+    "Outro",
+  ]);
   expect(copyPart(song, 0)).toBeNull();
 });
 
@@ -51,10 +57,14 @@ const part = fc.tuple(
   fc.constantFrom(...names),
   fc.array(fc.constantFrom("G   C", "low tide and still", "# softly", ""), { maxLength: 4 }),
 );
-const text = fc.array(part, { minLength: 1, maxLength: 6 }).map((parts) =>
-  parts.flatMap(([name, rows]) => [name, ...rows]).join("\n"),
-);
-const rows = (chart: string) => chart.split("\n").filter((row) => row.trim() !== "").sort();
+const text = fc
+  .array(part, { minLength: 1, maxLength: 6 })
+  .map((parts) => parts.flatMap(([name, rows]) => [name, ...rows]).join("\n"));
+const rows = (chart: string) =>
+  chart
+    .split("\n")
+    .filter((row) => row.trim() !== "")
+    .sort();
 
 test("moving keeps every row, and moving back gives the same text", () => {
   fc.assert(
@@ -70,16 +80,22 @@ test("moving keeps every row, and moving back gives the same text", () => {
 
 test("a renamed part says its new name, and no other part changes", () => {
   fc.assert(
-    fc.property(text, fc.nat(5), fc.constantFrom("Tag", "Quiet part", "Chorus"), fc.integer({ min: 1, max: 9 }), (chart, pick, name, times) => {
-      const before = chartParts(chart);
-      const index = pick % before.length;
-      const after = chartParts(renamePart(chart, index, name, times)!);
-      expect(after).toHaveLength(before.length);
-      after.forEach((each, at) => {
-        if (at === index) expect(each).toMatchObject({ name, times });
-        else expect(each).toMatchObject({ name: before[at]!.name, times: before[at]!.times });
-      });
-    }),
+    fc.property(
+      text,
+      fc.nat(5),
+      fc.constantFrom("Tag", "Quiet part", "Chorus"),
+      fc.integer({ min: 1, max: 9 }),
+      (chart, pick, name, times) => {
+        const before = chartParts(chart);
+        const index = pick % before.length;
+        const after = chartParts(renamePart(chart, index, name, times)!);
+        expect(after).toHaveLength(before.length);
+        after.forEach((each, at) => {
+          if (at === index) expect(each).toMatchObject({ name, times });
+          else expect(each).toMatchObject({ name: before[at]!.name, times: before[at]!.times });
+        });
+      },
+    ),
     { numRuns: 200 },
   );
 });

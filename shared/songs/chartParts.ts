@@ -74,7 +74,10 @@ export function movePart(text: string, index: number, to: number): string | null
   const movable = moved !== undefined && moved.label !== null && index >= 0;
   if (!movable || to < 0 || to > blocks.length || (to === 0 && blocks[0]?.label === null)) return null;
   blocks.splice(to, 0, moved);
-  return joined(text, blocks.map((block, place) => ({ ...block, gap: gaps[place] ?? [] })));
+  return joined(
+    text,
+    blocks.map((block, place) => ({ ...block, gap: gaps[place] ?? [] })),
+  );
 }
 
 /**
@@ -181,13 +184,19 @@ function readLabel(label: string | null): { name: string | null; times: number }
 
 /** A row that is read as this heading: in the brackets of the old one, bare, with a colon, or in square brackets. */
 function headingFor(name: string, times: number, old: string): string | null {
-  const clean = name.replace(/[[\]{}<>()|\s]+/g, " ").trim().slice(0, 40);
+  const clean = name
+    .replace(/[[\]{}<>()|\s]+/g, " ")
+    .trim()
+    .slice(0, 40);
   if (!/\p{L}/u.test(clean) || !Number.isInteger(times) || times < 1 || times > 99) return null;
   const behind = times === 1 ? "" : ` x${times}`;
-  const [, indent = "", open = "", close = ""] = /^(\s*)([[{<(]?).*?([\]}>)]?)(?:\s*\(?[x×]?\s?\d*\s?[x×]?\)?)?\s*[:.]?\s*$/i.exec(old) ?? [];
+  const [, indent = "", open = "", close = ""] =
+    /^(\s*)([[{<(]?).*?([\]}>)]?)(?:\s*\(?[x×]?\s?\d*\s?[x×]?\)?)?\s*[:.]?\s*$/i.exec(old) ?? [];
   const colon = /:\s*$/.test(old) ? ":" : "";
   const tries = [
-    ...(open !== "" && close !== "" ? [`${indent}${open}${clean}${close}${behind}`] : [`${indent}${clean}${behind}${colon}`]),
+    ...(open !== "" && close !== ""
+      ? [`${indent}${open}${clean}${close}${behind}`]
+      : [`${indent}${clean}${behind}${colon}`]),
     `${clean}${behind}:`,
     `[${clean}]${behind}`,
   ];

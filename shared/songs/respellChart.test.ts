@@ -9,7 +9,9 @@ test.each([
   ["Gm  D#  A#/F", { tonic: "G", mode: "minor" }, "Gm  Eb  Bb/F"],
   ["(A♯)  F", { tonic: "F", mode: "major" }, "(B♭)  F"],
 ] as const)("%s becomes as its key calls it", (written, key, expected) => {
-  expect(respellChart(`Verse\n${written}\nlow tide and still`, key)?.text).toBe(`Verse\n${expected}\nlow tide and still`);
+  expect(respellChart(`Verse\n${written}\nlow tide and still`, key)?.text).toBe(
+    `Verse\n${expected}\nlow tide and still`,
+  );
 });
 
 test("a chart that is spelled by its key is left alone, and so are passing chords that lead up", () => {

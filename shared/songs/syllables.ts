@@ -55,6 +55,9 @@ function vowelGroups(letters: readonly string[]): { start: number; end: number }
   const stem = letters.slice(0, end).join("");
   const silent =
     (final.start === end - 1 && letters[final.start] === "e" && !/[bcdfgkpt]le$/.test(stem)) ||
-    (/(?:[^td]ed|[^csxzhg]es)$/.test(stem) && final.start === end - 2 && letters[final.start] === "e" && final.end === end - 1);
+    (/(?:[^td]ed|[^csxzhg]es)$/.test(stem) &&
+      final.start === end - 2 &&
+      letters[final.start] === "e" &&
+      final.end === end - 1);
   return silent ? groups.slice(0, -1) : groups;
 }

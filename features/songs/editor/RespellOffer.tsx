@@ -29,7 +29,13 @@ export function RespellOffer({
       testID="respell"
       title={`Some chords are not spelled as in ${sign}`}
       action={
-        <Button kind="text" small label={`Respell in ${sign}`} onPress={() => onText(offer.text)} testID="respell-now" />
+        <Button
+          kind="text"
+          small
+          label={`Respell in ${sign}`}
+          onPress={() => onText(offer.text)}
+          testID="respell-now"
+        />
       }
     >
       {`In ${sign} one writes ${some.join(", ")}${more > 0 ? ` and ${more} more` : ""}. They sound the same.`}

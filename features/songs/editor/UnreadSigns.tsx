@@ -7,13 +7,7 @@ import type { UnreadSign } from "@/shared/songs/chart";
 const shown = 6;
 
 /** What on the chord lines could not be read, and where it stands: each leads there. It is kept as it is. */
-export function UnreadSigns({
-  signs,
-  onShow,
-}: {
-  signs: readonly UnreadSign[];
-  onShow: (sign: UnreadSign) => void;
-}) {
+export function UnreadSigns({ signs, onShow }: { signs: readonly UnreadSign[]; onShow: (sign: UnreadSign) => void }) {
   if (signs.length === 0) return null;
   const more = signs.length - shown;
   return (

@@ -6,10 +6,7 @@ export function WrongNotice({ errors }: { errors: DraftErrors }) {
   const wrong = Object.values(errors).filter((message) => message !== undefined);
   if (wrong.length === 0) return null;
   return (
-    <Notice
-      kind="error"
-      title={wrong.length === 1 ? "One thing needs mending" : `${wrong.length} things need mending`}
-    >
+    <Notice kind="error" title={wrong.length === 1 ? "One thing needs mending" : `${wrong.length} things need mending`}>
       {wrong.join(" ")}
     </Notice>
   );

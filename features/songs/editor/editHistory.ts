@@ -29,8 +29,7 @@ export function changeTo<Value>(
   now: number,
 ): EditHistory<Value> {
   const { typing } = history;
-  const joins =
-    typing !== null && typing.tag === tag && now - typing.last < pause && now - typing.since < longestStep;
+  const joins = typing !== null && typing.tag === tag && now - typing.last < pause && now - typing.since < longestStep;
   return {
     past: joins ? history.past : [...history.past, history.present].slice(-mostSteps),
     present,

@@ -68,7 +68,9 @@ export function HistoryScreen({ song }: { song: Song }) {
         <QueryState
           query={versions}
           title="The earlier versions could not be opened"
-          skeleton={<Skeleton bars={[{ height: 64 }, { height: 64 }, { height: 64 }]} words="Opening earlier versions" />}
+          skeleton={
+            <Skeleton bars={[{ height: 64 }, { height: 64 }, { height: 64 }]} words="Opening earlier versions" />
+          }
         >
           {(list) =>
             list.length === 0 ? (

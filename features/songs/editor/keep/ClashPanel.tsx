@@ -28,7 +28,10 @@ export function ClashPanel({ base, theirs, draft, onSettled }: ClashPanelProps) 
     const found = draft.key === null ? keyOfDraft(draft) : null;
     return Object.keys(draftErrors(draft, found)).length > 0 ? null : songFromDraft(draft, found, base);
   }, [draft, base]);
-  const merge = useMemo(() => mine && mergeSongs(contentOf(base), contentOf(mine), contentOf(theirs)), [base, mine, theirs]);
+  const merge = useMemo(
+    () => mine && mergeSongs(contentOf(base), contentOf(mine), contentOf(theirs)),
+    [base, mine, theirs],
+  );
   const [sides, setSides] = useState<readonly Side[]>([]);
   const clashes = merge?.clashes ?? [];
   const chosen = clashes.map((_, index): Side => sides[index] ?? "mine");
@@ -57,7 +60,14 @@ export function ClashPanel({ base, theirs, draft, onSettled }: ClashPanelProps) 
           />
         ))}
       <View style={{ flexDirection: "row", flexWrap: "wrap", gap: 8 }}>
-        {merge && <Button small label={clashes.length === 0 ? "Put both together" : "Keep it like this"} onPress={together} testID="clash-merge" />}
+        {merge && (
+          <Button
+            small
+            label={clashes.length === 0 ? "Put both together" : "Keep it like this"}
+            onPress={together}
+            testID="clash-merge"
+          />
+        )}
         <Button kind="secondary" small label="Keep mine" onPress={() => onSettled(null, null)} testID="clash-mine" />
         <Button
           kind="secondary"

@@ -3,8 +3,7 @@ import { LiveText } from "@/features/ui/LiveText";
 import { ApiError } from "@/features/api/apiError";
 import type { KeepState } from "./songKeeper";
 
-const clock = (at: Date) =>
-  `${String(at.getHours()).padStart(2, "0")}:${String(at.getMinutes()).padStart(2, "0")}`;
+const clock = (at: Date) => `${String(at.getHours()).padStart(2, "0")}:${String(at.getMinutes()).padStart(2, "0")}`;
 
 export function keptWords(state: KeepState): string {
   switch (state.kind) {

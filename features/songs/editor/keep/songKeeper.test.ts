@@ -22,7 +22,8 @@ function open() {
     stage.puts += 1;
     if (version) stage.versions.push(stage.kept.title);
     if (stage.offline) throw ApiError.offline();
-    if (next.revision !== stage.kept.revision) throw new ApiError(409, "changed-elsewhere", "It was changed elsewhere.");
+    if (next.revision !== stage.kept.revision)
+      throw new ApiError(409, "changed-elsewhere", "It was changed elsewhere.");
     return (stage.kept = { ...next, revision: next.revision + 1 });
   };
   const keeper = createSongKeeper(song, {
@@ -36,7 +37,14 @@ function open() {
     stage.now = { ...contentOf(song), ...stage.now, ...changes };
     keeper.touch();
   };
-  return { song, stage, keeper, change, last: () => stage.states.at(-1)!, wait: () => jest.advanceTimersByTimeAsync(1600) };
+  return {
+    song,
+    stage,
+    keeper,
+    change,
+    last: () => stage.states.at(-1)!,
+    wait: () => jest.advanceTimersByTimeAsync(1600),
+  };
 }
 
 test("typing in a row is kept once, a moment after the last letter", async () => {

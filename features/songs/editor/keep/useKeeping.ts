@@ -90,10 +90,7 @@ export function useKeeping({ song, draft, base, restored, findKey, onNewer }: As
   return {
     state,
     keep: useCallback(() => keeper.keep(), [keeper]),
-    settle: useCallback(
-      (theirs: Song, givenUp: SongContent | null) => keeper.settle(theirs, givenUp),
-      [keeper],
-    ),
+    settle: useCallback((theirs: Song, givenUp: SongContent | null) => keeper.settle(theirs, givenUp), [keeper]),
   };
 }
 

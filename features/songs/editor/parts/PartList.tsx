@@ -113,7 +113,10 @@ export function PartList({ text, onText, onShow, level = 2 }: PartListProps) {
           label="Add"
           accessibleName={`Add ${kindWords[adding].toLowerCase()}`}
           onPress={() => {
-            const named = freeName(adding, parts.map((part) => part.name));
+            const named = freeName(
+              adding,
+              parts.map((part) => part.name),
+            );
             if (put(addPart(text, named))) setOpen(parts.length);
           }}
           testID="add-part"

@@ -6,6 +6,7 @@ import { IconButton } from "@/features/ui/IconButton";
 import { LiveText } from "@/features/ui/LiveText";
 import { setSigns } from "@/features/ui/textSigns";
 import { colors, fonts } from "@/features/ui/theme";
+import { unseen } from "@/features/ui/unseen";
 import { glyphs } from "@/shared/music/pitch";
 import type { PaletteChord } from "./palette";
 import type { Placing } from "./usePlacing";
@@ -28,7 +29,12 @@ export function PlaceBar({ placing }: { placing: Placing }) {
         </View>
         {standing !== null && (
           <>
-            <IconButton icon="back" label="Move the chord one letter left" onPress={() => nudge(-1)} testID="nudge-left" />
+            <IconButton
+              icon="back"
+              label="Move the chord one letter left"
+              onPress={() => nudge(-1)}
+              testID="nudge-left"
+            />
             <IconButton
               icon="forward"
               label="Move the chord one letter right"
@@ -91,9 +97,9 @@ function PaletteButton({ chord: { text, roman }, on, quiet = false, onPress }: P
     <button
       type="button"
       aria-pressed={on}
-      aria-label={roman === null ? glyphs(text) : `${glyphs(text)}, ${glyphs(roman)}`}
       onClick={() => onPress(text)}
       style={{
+        position: "relative",
         flex: "none",
         minWidth: 52,
         minHeight: 52,
@@ -109,12 +115,15 @@ function PaletteButton({ chord: { text, roman }, on, quiet = false, onPress }: P
         justifyContent: "center",
       }}
     >
-      <span style={{ font: `600 16px/20px ${fonts.mono}` }}>{setSigns(glyphs(text))}</span>
+      <span aria-hidden style={{ font: `600 16px/20px ${fonts.mono}` }}>
+        {setSigns(glyphs(text))}
+      </span>
       {roman !== null && (
-        <span style={{ font: `400 12px/15px ${fonts.text}`, color: on ? colors.onPlum : colors.inkSoft }}>
+        <span aria-hidden style={{ font: `400 12px/15px ${fonts.text}`, color: on ? colors.onPlum : colors.inkSoft }}>
           {setSigns(glyphs(roman))}
         </span>
       )}
+      <span style={unseen}>{roman === null ? glyphs(text) : `${glyphs(text)}, ${glyphs(roman)}`}</span>
     </button>
   );
 }

@@ -4,6 +4,7 @@ import { Heading } from "@/features/ui/Heading";
 import { Text } from "@/features/ui/Text";
 import { setSigns } from "@/features/ui/textSigns";
 import { colors, fonts } from "@/features/ui/theme";
+import { unseen } from "@/features/ui/unseen";
 import { glyphs } from "@/shared/music/pitch";
 import { cellWords, type PlaceCell, type PlaceItem, type PlaceLine } from "./placeLines";
 import type { Placing } from "./usePlacing";
@@ -107,7 +108,7 @@ const Item = memo(
     if (item.kind === "heading")
       return (
         <View style={{ marginTop: 12 }}>
-          <Heading level={3} size={14} style={{ color: colors.inkSoft, fontWeight: "600", letterSpacing: 0 }}>
+          <Heading level={2} size={14} style={{ color: colors.inkSoft, fontWeight: "600", letterSpacing: 0 }}>
             {item.text}
           </Heading>
         </View>
@@ -174,24 +175,29 @@ function Cell({ cell, row, chosen, reachable, onChoose }: CellProps) {
       {fixed ? null : <span style={under}>{text === "" ? "\u00a0" : setSigns(text)}</span>}
     </>
   );
-  if (fixed) return <span style={{ ...cellStyle, cursor: "default" }}>{face}</span>;
+  if (fixed) return <span style={{ ...cellStyle, ...faceStyle, cursor: "default" }}>{face}</span>;
   return (
     <button
       type="button"
       data-spot={`${row}:${column}`}
-      aria-label={cellWords(cell, row)}
       aria-pressed={chosen}
       tabIndex={reachable ? 0 : -1}
       onFocus={() => onChoose(row, column)}
       onClick={() => onChoose(row, column)}
       style={{ ...cellStyle, ...(chosen ? { background: "var(--tint)", outline: `2px solid ${colors.plum}` } : null) }}
     >
-      {face}
+      <span aria-hidden style={faceStyle}>
+        {face}
+      </span>
+      <span style={unseen}>{cellWords(cell, row)}</span>
     </button>
   );
 }
 
+const faceStyle: CSSProperties = { display: "inline-flex", flexDirection: "column", alignItems: "stretch" };
+
 const cellStyle: CSSProperties = {
+  position: "relative",
   display: "inline-flex",
   flexDirection: "column",
   justifyContent: "flex-end",

@@ -26,7 +26,8 @@ export interface PlaceLine {
   words: PlaceCell[][];
 }
 
-export type PlaceItem = PlaceLine | { kind: "heading"; row: number; text: string } | { kind: "remark"; row: number; text: string };
+export type PlaceItem =
+  PlaceLine | { kind: "heading"; row: number; text: string } | { kind: "remark"; row: number; text: string };
 
 /** The text with all tabs counted out, as places are counted in it. */
 export function withoutTabs(text: string): string {
@@ -91,7 +92,8 @@ function wordAround(lyrics: string, column: number): string {
 export function spotWords({ column: _, ...cell }: PlaceCell, row: number): string {
   const line = `line ${row + 1}`;
   const syllable = cell.text.replace(/^[^\p{L}\p{N}]+|[^\p{L}\p{N}]+$/gu, "");
-  if (syllable === "") return cell.word === "" && cell.text === "" ? `after the words, ${line}` : `“${cell.text}”, ${line}`;
+  if (syllable === "")
+    return cell.word === "" && cell.text === "" ? `after the words, ${line}` : `“${cell.text}”, ${line}`;
   return syllable === cell.word ? `“${syllable}”, ${line}` : `“${syllable}” of ${cell.word}, ${line}`;
 }
 

@@ -1,5 +1,5 @@
 /** How many tags a song may have, and how long one may be. */
-export const mostTags = 20;
+const mostTags = 20;
 const longestTag = 40;
 
 /** A tag as it is kept: no blanks around it, single ones within. */

@@ -18,8 +18,9 @@ const lagWindow = Float32Array.from({ length: MAX_LAG + 1 }, (_, lag) => (lag ==
  *
  * @param r autocorrelation of the frame with the room subtracted, shape [141]
  * @param hz the pitch in question
- * @param enclosed leaves out what lies above the last multiple: there a harmonic may be weak only because the sound ends,
- *   as above a formant, which a choice between candidates can bear and a verdict on the sound cannot
+ * @param enclosed leaves out what lies above the last multiple, where a harmonic may be weak only because the sound ends,
+ *   and what stands out alone, as one harmonic does on a formant: a choice between candidates can bear that, a verdict on
+ *   the sound cannot
  * @returns 0 (those between are missing) to 1 (all are there); 1 where too few harmonics fit to tell
  * @see the Wiener-Khinchin theorem: the spectrum is the cosine transform of the autocorrelation
  */
@@ -30,7 +31,10 @@ export function harmonicPresence(r: Float32Array, hz: number, enclosed = false):
   for (let h = 1; h <= count; h++) power[h] = Math.max(0, powerAt(r, h * hz));
   const least = LEAST_SHARE * MAX_LAG * 0.5 * Math.max(0, r[0]!);
   let presence = 1;
-  for (const every of [2, 3, 5, 7]) if (every < count) presence = Math.min(presence, between(power, count, every, least, enclosed));
+  for (const every of [2, 3, 5, 7]) {
+    const several = enclosed ? 2 * every <= count : every < count;
+    if (several) presence = Math.min(presence, between(power, count, every, least, enclosed));
+  }
   return presence;
 }
 

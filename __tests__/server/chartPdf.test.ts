@@ -1,5 +1,5 @@
 import { inflateSync } from "node:zlib";
-import request from "supertest";
+import request, { type Response } from "supertest";
 import { startTestServer, type TestServer } from "./testServer";
 
 let server: TestServer;
@@ -11,7 +11,8 @@ beforeEach(() => server.database.query("DELETE FROM tries"));
 
 const print = (body: object) => request(server.app).post("/api/charts/pdf").send(body).buffer(true).parse(bytesOf);
 
-function bytesOf(stream: NodeJS.ReadableStream, done: (error: Error | null, body: Buffer) => void): void {
+function bytesOf(response: Response, done: (error: Error | null, body: unknown) => void): void {
+  const stream = response as unknown as NodeJS.ReadableStream;
   const chunks: Buffer[] = [];
   stream.on("data", (chunk: Buffer) => chunks.push(chunk));
   stream.on("end", () => done(null, Buffer.concat(chunks)));

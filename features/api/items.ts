@@ -25,7 +25,7 @@ export const collections = [
 ] as const satisfies readonly Collection[];
 
 /** What may be asked for when something is kept. */
-export interface PutOptions {
+interface PutOptions {
   /** a song: keep the state before as a version, however young the newest one is */
   version?: boolean;
 }

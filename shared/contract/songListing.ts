@@ -5,7 +5,7 @@ import { song, tonicName } from "./song";
  * What a list needs to know of a song: everything to show, sort and judge it by, without its chart and notes.
  * Cheap enough to fetch all of a large shelf, page by page, and sort it by key or by fit for a voice.
  */
-export const songListing = z.strictObject({
+const songListing = z.strictObject({
   ...song.pick({ id: true, title: true, writtenKey: true, beatsPerBar: true, tempo: true, demo: true, tags: true })
     .shape,
   ...song.pick({ archivedAt: true, playedAt: true, createdAt: true, revision: true }).shape,

@@ -2,7 +2,8 @@ import { useEffect, useRef } from "react";
 import { Pressable, View } from "react-native";
 import { Text } from "@/features/ui/Text";
 import { colors } from "@/features/ui/theme";
-import { webProps } from "@/features/ui/webStyle";
+import { unseen } from "@/features/ui/unseen";
+import { webProps, webStyle } from "@/features/ui/webStyle";
 import { glyphs, noteName, type Spelling } from "@/shared/music/pitch";
 import type { MelodyNote } from "@/shared/songs/melody";
 import { lengthSign, lengthWords } from "./lengthWords";
@@ -69,6 +70,9 @@ export function NoteList({
       {notes.map((note, place) => {
         const index = first + place;
         const picked = chosen !== null && index >= chosen.from && index <= chosen.to;
+        const [name, step] = [glyphs(noteName(note.midi, spelling)), stepName(note.midi, homeMidi)];
+        const shown = names === "notes" ? name : step;
+        const under = note.lyric ?? lengthSign(note.duration);
         return (
           <Pressable
             key={index}
@@ -78,7 +82,6 @@ export function NoteList({
             }}
             role="option"
             aria-selected={picked}
-            aria-label={`Note ${index + 1}: ${glyphs(noteName(note.midi, spelling))}, step ${stepName(note.midi, homeMidi)}, ${lengthWords(note.duration)}${note.lyric ? `, ${note.lyric}` : ""}`}
             testID={`note-${index}`}
             onPress={() =>
               onChoose(
@@ -101,11 +104,14 @@ export function NoteList({
             }}
           >
             <Text variant="monoBold" style={{ fontSize: 15, lineHeight: 20 }} testID={`note-name-${index}`}>
-              {names === "notes" ? glyphs(noteName(note.midi, spelling)) : stepName(note.midi, homeMidi)}
+              {shown}
             </Text>
             <Text variant="tiny" tone="soft" numberOfLines={1} style={{ maxWidth: 72 }}>
-              {note.lyric ?? lengthSign(note.duration)}
+              {under}
             </Text>
+            <Text
+              style={webStyle(unseen)}
+            >{`. Note ${index + 1}, ${names === "notes" ? `step ${step}` : name}, ${lengthWords(note.duration)}`}</Text>
           </Pressable>
         );
       })}

@@ -5,7 +5,7 @@ import type { KeepState } from "./songKeeper";
 
 const clock = (at: Date) => `${String(at.getHours()).padStart(2, "0")}:${String(at.getMinutes()).padStart(2, "0")}`;
 
-export function keptWords(state: KeepState): string {
+function keptWords(state: KeepState): string {
   switch (state.kind) {
     case "kept":
       return state.at === null ? "Changes are kept by themselves" : `Kept ${clock(state.at)}`;

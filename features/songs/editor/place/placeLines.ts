@@ -89,7 +89,7 @@ function wordAround(lyrics: string, column: number): string {
 }
 
 /** Where a place is, in words: "“har” of harbour, line 3". Lines count from 1, as the text does. */
-export function spotWords({ column: _, ...cell }: PlaceCell, row: number): string {
+function spotWords({ column: _, ...cell }: PlaceCell, row: number): string {
   const line = `line ${row + 1}`;
   const syllable = cell.text.replace(/^[^\p{L}\p{N}]+|[^\p{L}\p{N}]+$/gu, "");
   if (syllable === "")

@@ -1,0 +1,17 @@
+import { parseChart } from "@/shared/songs/chart";
+import { firstLines, shownPlace } from "./shownLines";
+
+const chart = parseChart("\nVerse\n\nG   C\nlow tide\n# softly\n\nChorus\nD\nstill");
+
+test("a row of the text is found in what is drawn", () => {
+  const { sections } = firstLines(chart, 100);
+  expect(sections.map(({ label }) => label)).toEqual(["Verse", "Chorus"]);
+  expect(shownPlace(chart, 3)).toEqual({ section: 0, line: 0 });
+  expect(shownPlace(chart, 4)).toEqual({ section: 0, line: 0 });
+  expect(shownPlace(chart, 5)).toEqual({ section: 0, line: 1 });
+  expect(shownPlace(chart, 9)).toEqual({ section: 1, line: 0 });
+});
+
+test("headings, blank rows at an end and rows behind the end are nowhere", () => {
+  for (const row of [0, 1, 2, 6, 7, 40]) expect(shownPlace(chart, row)).toBeNull();
+});

@@ -19,7 +19,7 @@ const layer = (name, ...below) => ({
   to: { path: "^shared/", pathNot: `^shared/(${[name, ...below].join("|")})/` },
 });
 
-const enginePackages = "node_modules/(pitchy|tonal|@tonaljs|@tonejs/midi|abcjs|fast-xml-parser|fflate|ts-fsrs)/";
+const enginePackages = "node_modules/(pitchy|tonal|@tonaljs|midi-file|saxes|xmlchars|fflate|ts-fsrs)/";
 const domain = "^server/(?!http/|database/|cli/|setup/)([^/]+)/";
 
 /** @type {import('dependency-cruiser').IConfiguration} */

@@ -1,5 +1,5 @@
 const esm =
-  "node_modules/(?!(react-native(-[a-z-]+)?|@react-native|@react-native-community|expo|expo-.*|@expo|react-navigation|@react-navigation|pitchy|fft.js|abcjs)/)";
+  "node_modules/(?!(react-native(-[a-z-]+)?|@react-native|@react-native-community|expo|expo-.*|@expo|react-navigation|@react-navigation|pitchy|fft.js)/)";
 const alias = { "^@/(.*)$": "<rootDir>/$1" };
 const client = {
   moduleNameMapper: { "\\.woff2?$": "<rootDir>/__tests__/client/fontFile.js", ...alias },

@@ -84,7 +84,7 @@ function ResultWords({ take, onAgain, onSongs, onFelt, trail }: TakeResultProps)
         </Text>
         <NoteDots clear={clear} all={Math.max(judged, clear)} />
       </View>
-      <NextStep words={report.nextStep} onPress={wantsMore(report) ? onAgain : onSongs} />
+      <NextStep words={report.nextStep} onPress={report.advice === "go-on" ? onSongs : onAgain} />
       <Why take={take} certainty={report.certainty} reasons={others} />
       {processed.length > 0 && (
         <Notice kind="caution" testID="take-processed">
@@ -95,11 +95,6 @@ function ResultWords({ take, onAgain, onSongs, onFelt, trail }: TakeResultProps)
       <AfterSinging warmedUp={take.warmedUp} effort={take.effort} onChange={onFelt} />
     </View>
   );
-}
-
-/** The two reasons for singing on: not sure enough, or too small a part of the voice was heard. */
-function wantsMore({ certainty, range }: HeardTake["report"]): boolean {
-  return certainty < 0.5 || range === null || range.highMidi - range.lowMidi < 12;
 }
 
 function NextStep({ words, onPress }: { words: string; onPress: () => void }) {

@@ -4,7 +4,7 @@ import { Heading } from "@/features/ui/Heading";
 import { Text } from "@/features/ui/Text";
 import { webStyle } from "@/features/ui/webStyle";
 import type { Song } from "@/shared/contract/song";
-import { DecidedLine } from "./DecidedLine";
+import { DecidedLine } from "./decision/DecidedLine";
 import { KeyColumn } from "./KeyColumn";
 import type { KeyRow } from "./keyRows";
 import { KeysMissing } from "./KeysMissing";

@@ -1,6 +1,6 @@
 import type { Song } from "@/shared/contract/song";
 import { askedKey, chordsIn, keyInHand, keyRowsOf, writtenKeyOf } from "./songKeys";
-import { decide } from "./decide";
+import { decide } from "./decision/decide";
 
 const song: Song = {
   id: "7f0b6f0e-6a51-4a8e-9a53-0a3d8f6f3f01",

@@ -6,7 +6,7 @@ import { parseChord, transposeChord } from "@/shared/music/chord";
 import { type KeyName, tonicPitchClass } from "@/shared/music/keyName";
 import { movedKey } from "@/shared/music/keyWords";
 import { chartChords, parseChart } from "@/shared/songs/chart";
-import { decidedElsewhere, stillFits } from "./decide";
+import { decidedElsewhere, stillFits } from "./decision/decide";
 import { keyRows, rowOf, type KeyRow } from "./keyRows";
 
 /** How many chords a row shows. */

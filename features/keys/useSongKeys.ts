@@ -8,8 +8,8 @@ import { COARSE_WORDS } from "@/shared/keys/keyReason";
 import type { KeyName } from "@/shared/music/keyName";
 import { keySign } from "@/shared/music/keyWords";
 import { glyphs } from "@/shared/music/pitch";
-import { decide, decidedElsewhere, type Choice } from "./decide";
-import { decisionFor, decisionQueries, useRemoveDecision, useSaveDecision } from "./decisionQueries";
+import { decide, decidedElsewhere, type Choice } from "./decision/decide";
+import { decisionFor, decisionQueries, useRemoveDecision, useSaveDecision } from "./decision/decisionQueries";
 import { noFitWords, wholeVoice, type KeyRow } from "./keyRows";
 import { keyInHand, keyRowsOf, songChords, writtenKeyOf, type KeyInHand } from "./songKeys";
 

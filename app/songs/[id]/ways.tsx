@@ -3,7 +3,7 @@ import { useLocalSearchParams } from "expo-router";
 import { InstrumentSelect } from "@/features/instruments/InstrumentSelect";
 import { instrumentWords } from "@/features/instruments/myInstruments";
 import { useInstrument } from "@/features/instruments/useInstrument";
-import { DecidedLine } from "@/features/keys/DecidedLine";
+import { DecidedLine } from "@/features/keys/decision/DecidedLine";
 import { askedKey } from "@/features/keys/songKeys";
 import { decidedHere, useSongKeys } from "@/features/keys/useSongKeys";
 import { MovedChart } from "@/features/songs/MovedChart";

@@ -7,7 +7,7 @@ import { KeySign } from "@/features/ui/KeySign";
 import { Text } from "@/features/ui/Text";
 import { colors, mixtures } from "@/features/ui/theme";
 import type { SingingVoice } from "@/shared/keys/keyScore";
-import type { KeyRow } from "./keyRows";
+import type { KeyRow } from "../keyRows";
 
 const step = 12;
 /** room over the top rung of the ladder on a full card, so that rungs go on from card to card */

@@ -7,7 +7,7 @@ import { setSigns } from "@/features/ui/textSigns";
 import { colors, fonts, sizes } from "@/features/ui/theme";
 import { unseen } from "@/features/ui/unseen";
 import type { SingingVoice } from "@/shared/keys/keyScore";
-import { commonScale, spellingIn, type KeyOrder, type KeyRow } from "./keyRows";
+import { commonScale, spellingIn, type KeyOrder, type KeyRow } from "../keyRows";
 import { cell, firstColumn, KeyTableRow, secondColumn, type TableWay } from "./KeyTableRow";
 import { tableColumns } from "./tableColumns";
 

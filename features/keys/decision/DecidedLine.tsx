@@ -2,7 +2,7 @@ import { View } from "react-native";
 import { Button } from "@/features/ui/Button";
 import { Text } from "@/features/ui/Text";
 import { decidedOn } from "./decide";
-import type { SongKeys } from "./useSongKeys";
+import type { SongKeys } from "../useSongKeys";
 
 export interface DecidedLineProps {
   keys: Pick<SongKeys, "decision" | "decided" | "saving" | "undo">;

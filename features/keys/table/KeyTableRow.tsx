@@ -4,7 +4,7 @@ import { colors, fonts } from "@/features/ui/theme";
 import { unseen } from "@/features/ui/unseen";
 import { keySignParts } from "@/shared/music/keyWords";
 import { glyphs } from "@/shared/music/pitch";
-import type { KeyRow, Room } from "./keyRows";
+import type { KeyRow, Room } from "../keyRows";
 import type { TableColumns } from "./tableColumns";
 
 /** The best way to play a key, in two short lines; undefined while it is searched, null where there is none. */

@@ -1,11 +1,11 @@
 import { fireEvent, render, screen, within } from "@testing-library/react";
 import { useState } from "react";
 import type { Song } from "@/shared/contract/song";
-import { sortedRows, wholeVoice, type KeyOrder, type KeyRow } from "./keyRows";
+import { sortedRows, wholeVoice, type KeyOrder, type KeyRow } from "../keyRows";
 import { KeyTable } from "./KeyTable";
 import type { TableWay } from "./KeyTableRow";
 import { tableColumns } from "./tableColumns";
-import { keyRowsOf } from "./songKeys";
+import { keyRowsOf } from "../songKeys";
 
 const song: Song = {
   id: "7f0b6f0e-6a51-4a8e-9a53-0a3d8f6f3f01",

@@ -7,7 +7,7 @@ import { Text } from "@/features/ui/Text";
 import { colors } from "@/features/ui/theme";
 import { webProps } from "@/features/ui/webStyle";
 import type { SingingVoice } from "@/shared/keys/keyScore";
-import { commonScale, spellingIn, type KeyRow } from "./keyRows";
+import { commonScale, spellingIn, type KeyRow } from "../keyRows";
 
 export interface KeyListProps {
   /** best first */

@@ -8,7 +8,7 @@ import { useLayout } from "@/features/ui/useLayout";
 import { fonts } from "@/features/ui/theme";
 import type { SingingVoice } from "@/shared/keys/keyScore";
 import { KeyPartBars } from "./KeyPartBars";
-import { spellingIn, type KeyRow } from "./keyRows";
+import { spellingIn, type KeyRow } from "../keyRows";
 import { PeekCard } from "./PeekCard";
 
 export interface KeyDeckProps {

@@ -10,8 +10,8 @@ import { webStyle } from "@/features/ui/webStyle";
 import type { SingingVoice } from "@/shared/keys/keyScore";
 import { moveWords } from "@/shared/music/moveWords";
 import { glyphs, noteName } from "@/shared/music/pitch";
-import { commonScale, spellingIn } from "./keyRows";
-import type { KeyInHand } from "./songKeys";
+import { commonScale, spellingIn } from "../keyRows";
+import type { KeyInHand } from "../songKeys";
 
 export interface MyKeyCardProps {
   songId: string;

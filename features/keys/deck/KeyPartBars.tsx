@@ -4,7 +4,7 @@ import { colors } from "@/features/ui/theme";
 import { webStyle } from "@/features/ui/webStyle";
 import { partMaxima } from "@/shared/keys/keyParts";
 import type { KeyParts } from "@/shared/keys/keyScore";
-import { partNames } from "./partWords";
+import { partNames } from "../partWords";
 
 /** The five parts of a score, each as points of its most and as a bar. */
 export function KeyPartBars({ parts }: { parts: KeyParts }) {

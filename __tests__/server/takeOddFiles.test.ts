@@ -1,11 +1,11 @@
 import { mkdtempSync, rmSync, writeFileSync } from "node:fs";
 import { tmpdir } from "node:os";
 import { join } from "node:path";
-import { singPhrase } from "../../__tests__/sound/singer";
-import { wavBytes } from "../../__tests__/sound/wavFile";
-import { linesOf } from "../../__tests__/server/linesOf";
-import { takeVerb } from "./takeVerb";
-import { BadInput } from "./verb";
+import { singPhrase } from "../sound/singer";
+import { wavBytes } from "../sound/wavFile";
+import { linesOf } from "./linesOf";
+import { takeVerb } from "../../server/cli/takeVerb";
+import { BadInput } from "../../server/cli/verb";
 
 const folder = mkdtempSync(join(tmpdir(), "odd-"));
 afterAll(() => rmSync(folder, { recursive: true }));

@@ -2,6 +2,7 @@ import { keyFifths, spellTonic, tonicPitchClass, type Mode } from "../music/keyN
 import { pitchClass } from "../music/pitch";
 import { keyParts, voiceEdges, type VoiceEdges } from "./keyParts";
 import { keyReason } from "./keyReason";
+import { compareTies, nearestMove } from "./keyTies";
 import type { KeyMark, KeyScore, SingingVoice, Tune } from "./keyScore";
 import { tunePitches, type TunePitch } from "./tunePicture";
 
@@ -48,33 +49,12 @@ const singable = { low: 24, high: 96, widest: 30 };
 export function scoreKeys(tune: Tune, voice: SingingVoice, options: KeyOptions = {}): KeyScore[] {
   const mode = options.mode ?? "major";
   const home = tonicPitchClass(tune.home);
-  const present = tonicPitchClass(options.presentKey ?? tune.home);
   const edges = narrowed(voiceEdges(voice), options.evidence ?? []);
   const pitches = tunePitches(tune);
   const coarse = tune.kind === "span";
   const keys = Array.from({ length: 12 }, (_, pc) => bestOctave(pitches, edges, home, pc, mode, coarse));
-  const accidentals = (key: KeyScore) => Math.abs(keyFifths({ tonic: key.tonic, mode }));
-  const distance = (key: KeyScore) => Math.abs(nearestMove(present, tonicPitchClass(key.tonic)));
-  return keys.sort(
-    (a, b) =>
-      Number(a.beyond) - Number(b.beyond) ||
-      b.score - a.score ||
-      accidentals(a) - accidentals(b) ||
-      distance(a) - distance(b) ||
-      tonicPitchClass(a.tonic) - tonicPitchClass(b.tonic),
-  );
-}
-
-/**
- * Shortest move from one tonic to another.
- *
- * @param from pitch class
- * @param to pitch class
- * @returns semitones, -5 to 6
- */
-function nearestMove(from: number, to: number): number {
-  const up = (((to - from) % 12) + 12) % 12;
-  return up > 6 ? up - 12 : up;
+  const ties = compareTies(mode, options.presentKey ?? tune.home);
+  return keys.sort((a, b) => Number(a.beyond) - Number(b.beyond) || b.score - a.score || ties(a, b));
 }
 
 function bestOctave(

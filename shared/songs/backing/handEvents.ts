@@ -1,4 +1,6 @@
 import type { Chord } from "../../music/chord";
+import { tonicPitchClass } from "../../music/keyName";
+import { pitchClass } from "../../music/pitch";
 import type { BackingEvent } from "./backingPlan";
 import { bassNotes, voiceChord } from "./chordVoicing";
 import type { Metre } from "./metre";
@@ -21,6 +23,8 @@ interface Sounding {
   at: number;
   end: number;
   voicing: number[];
+  /** the string that is plucked alone: the one with the root */
+  plucked: number;
   bass: { first: number; other: number };
 }
 
@@ -84,7 +88,9 @@ function voiced(chords: readonly ChordInTime[], semitones: number, length: numbe
     if (!chord) return [];
     const voicing: number[] = voiceChord(chord, semitones, before);
     before = voicing;
-    return [{ at, end: chords[k + 1]?.at ?? length, voicing, bass: bassNotes(chord, semitones) }];
+    const lowest = tonicPitchClass(chord.root) + chord.intervals[0]! + semitones;
+    const plucked = voicing.find((midi) => pitchClass(midi) === pitchClass(lowest)) ?? voicing[0]!;
+    return [{ at, end: chords[k + 1]?.at ?? length, voicing, plucked, bass: bassNotes(chord, semitones) }];
   });
 }
 
@@ -99,5 +105,5 @@ function soundOf(kind: HandStroke["kind"]): BackingEvent["kind"] {
 function pitchesOf({ kind, chord }: { kind: HandStroke["kind"]; chord: Sounding }): number[] {
   if (kind === "bass-first") return [chord.bass.first];
   if (kind === "bass-other") return [chord.bass.other];
-  return kind === "pluck" ? chord.voicing.slice(0, 1) : chord.voicing;
+  return kind === "pluck" ? [chord.plucked] : chord.voicing;
 }

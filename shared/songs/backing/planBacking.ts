@@ -76,10 +76,12 @@ export function planBacking(song: BackingSong, key: BackingKey, wishes: BackingW
     ...played,
     ...(wishes.guide ? planned.map(guide) : []),
   ];
+  // What begins together in the music begins together in time, whatever the last digits of a sum say.
+  const place = ({ at }: BackingEvent) => Math.round((at * tempo * 1e5) / 60);
   const timed = (stretches: readonly BackingStretch[]) =>
     stretches.map(({ at, end, label }) => ({ at: countInS + seconds(at), end: countInS + seconds(end), label }));
   return {
-    events: events.sort((a, b) => a.at - b.at),
+    events: inOrder(events, place),
     beats,
     chords: chords.map(({ at, chord }) => {
       const name = chord && transposeChord(chord, semitones, target, song.writtenKey ?? undefined);
@@ -94,6 +96,17 @@ export function planBacking(song: BackingSong, key: BackingKey, wishes: BackingW
     countInS,
     durationS,
   };
+}
+
+/** By place in the music; those of one place get one time. */
+function inOrder(events: BackingEvent[], place: (event: BackingEvent) => number): BackingEvent[] {
+  const sorted = events.sort((a, b) => place(a) - place(b));
+  let last = { place: -1, at: 0 };
+  return sorted.map((event) => {
+    const here = place(event);
+    if (here !== last.place) last = { place: here, at: event.at };
+    return last.at === event.at ? event : { ...event, at: last.at };
+  });
 }
 
 /** Parts up to the end of the tune as it is written; without a tune the whole song. */

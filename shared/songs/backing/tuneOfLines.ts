@@ -15,6 +15,8 @@ export interface TuneLine {
 
 /** Notes around the place that counting gives, among which the end of a line is looked for. */
 const around = 4;
+/** Part of a bar that may lead into a line. */
+const mostLeadIn = 0.75;
 
 /**
  * Finds for each line of the chart the notes it is sung to. A tune is most often written for one verse and the chorus:
@@ -94,11 +96,19 @@ function divide(counts: readonly number[], notes: readonly MelodyNote[], bars: n
   const isEven = bars % counts.length === 0 && counted.every((bar, k) => Math.abs(bar - even[k]!) <= 1);
   const rising = counted.every((bar, k) => k === 0 || bar > counted[k - 1]!) && counted[counts.length - 1]! < bars;
   const starts = isEven || !rising ? even : counted;
+  // A line begins with its first bar or with the notes, less than a bar, that lead into it.
+  const inside = firsts.map((first, k) => {
+    const barStart = starts[k]! * metre.quarters - 1e-6;
+    const firstFrom = (quarters: number) => notes.findIndex(({ start }) => start >= quarters);
+    const latest = firstFrom(barStart);
+    const earliest = firstFrom(barStart - mostLeadIn * metre.quarters);
+    return k === 0 ? 0 : Math.max(earliest, latest < 0 ? first : Math.min(first, latest));
+  });
   return counts.map((_, k) => ({
     bar: starts[k]!,
     bars: (starts[k + 1] ?? bars) - starts[k]!,
-    from: firsts[k]!,
-    to: firsts[k + 1] ?? notes.length,
+    from: inside[k]!,
+    to: inside[k + 1] ?? notes.length,
   }));
 }
 

@@ -25,8 +25,20 @@ export interface Capture {
   close(): void;
 }
 
+/** What is not as in a usual take. */
+interface CaptureWays {
+  /** how long a take may be */
+  mostS?: number;
+  /** under which the tab remembers its take */
+  mark?: string;
+}
+
 /** Joins the microphone and the worker, and tells the recorder what happens. */
-export function createCapture(emit: (event: RecorderEvent) => void, live: LiveSound): Capture {
+export function createCapture(
+  emit: (event: RecorderEvent) => void,
+  live: LiveSound,
+  { mark, ...length }: CaptureWays = {},
+): Capture {
   let worker: Worker | null = null;
   const ear = createEar(emit, live);
   let reading = 0;
@@ -51,7 +63,7 @@ export function createCapture(emit: (event: RecorderEvent) => void, live: LiveSo
     else if (ear.microphone) {
       hear(live, message, performance.now());
       const now = Math.floor(message.seconds * ticksPerS);
-      if (now !== tick) emit({ kind: "heard", seconds: message.seconds });
+      if (now !== tick) emit({ kind: "heard", seconds: message.seconds, ...length });
       tick = now;
     }
   };
@@ -71,10 +83,10 @@ export function createCapture(emit: (event: RecorderEvent) => void, live: LiveSo
       if (opened && counted) await opened.countIn((left) => here() && emit({ kind: "beat", left }));
       if (!opened || !here()) return;
       const take = { id: newId(), sungAt: new Date().toISOString() };
-      markTakeOfThisTab(take.id);
+      markTakeOfThisTab(take.id, mark);
       void beginUnkept({ ...take, sampleRate: opened.sampleRate }).catch(() => undefined);
       const { port1, port2 } = new MessageChannel();
-      tell({ kind: "begin", sampleRate: opened.sampleRate, sound: port2, keepAs: take.id }, [port2]);
+      tell({ kind: "begin", sampleRate: opened.sampleRate, sound: port2, keepAs: take.id, ...length }, [port2]);
       ear.listen(port1);
       emit({ kind: "opened", ...take, processed: opened.processed });
     },
@@ -95,7 +107,7 @@ export function createCapture(emit: (event: RecorderEvent) => void, live: LiveSo
         if (mine !== reading) return;
         const sungAt = new Date(Math.min(Date.now(), file.lastModified)).toISOString();
         const take = { id: newId(), sungAt };
-        markTakeOfThisTab(take.id);
+        markTakeOfThisTab(take.id, mark);
         emit({ kind: "decoded", ...take, seconds: pcm.length / sampleRate });
         tell({ kind: "judgeKept", sampleRate, pcm, part: null }, [pcm.buffer]);
       } catch (fault) {

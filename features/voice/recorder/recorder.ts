@@ -70,7 +70,8 @@ export type RecorderEvent =
   | { kind: "beat"; left: number }
   | ({ kind: "opened" } & Sung)
   | { kind: "unavailable"; why: Unavailable }
-  | { kind: "heard"; seconds: number }
+  /** `mostS` where this take may be longer than others */
+  | { kind: "heard"; seconds: number; mostS?: number }
   | { kind: "stop" }
   | { kind: "interrupted"; cause: Interruption }
   | { kind: "flushed" }
@@ -198,9 +199,11 @@ function resultOf(take: HeardTake): RecorderState {
 function whileListening(state: RecorderState & { step: "listening" }, event: RecorderEvent): RecorderState {
   const stopping = (stoppedBy: StoppedBy): RecorderState => ({ ...state, step: "stopping", stoppedBy });
   switch (event.kind) {
-    case "heard":
-      if (event.seconds >= longestTakeS) return { ...stopping("full"), seconds: longestTakeS } as RecorderState;
+    case "heard": {
+      const { mostS = longestTakeS } = event;
+      if (event.seconds >= mostS) return { ...stopping("full"), seconds: mostS } as RecorderState;
       return { ...state, seconds: event.seconds };
+    }
     case "stop":
       return stopping("singer");
     case "interrupted":

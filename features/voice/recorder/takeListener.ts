@@ -104,13 +104,16 @@ export function createTakeListener(tools: TakeTools): (message: ToTakeWorker) =>
   };
 }
 
-function openTake({ sampleRate, sound, keepAs }: ToTakeWorker & { kind: "begin" }, tools: TakeTools): OpenTake {
+function openTake(
+  { sampleRate, sound, keepAs, mostS = longestTakeS }: ToTakeWorker & { kind: "begin" },
+  tools: TakeTools,
+): OpenTake {
   return {
     id: keepAs,
     sampleRate,
     sound,
     tracker: tools.createTracker(sampleRate),
-    pcm: new Float32Array(Math.ceil(sampleRate * longestTakeS)),
+    pcm: new Float32Array(Math.ceil(sampleRate * mostS)),
     length: 0,
     kept: 0,
     parts: 0,

@@ -3,6 +3,8 @@ import type { TakeReport } from "@/shared/voice/takeReport";
 
 /** A take ends by itself after this many seconds. */
 export const longestTakeS = 20;
+/** A song that is tried in a key is longer. */
+export const longestTryS = 240;
 /** From here on a take usually carries a range. */
 export const enoughTakeS = 5;
 
@@ -14,8 +16,8 @@ export interface TakePart {
 
 /** What the page tells the worker. */
 export type ToTakeWorker =
-  /** Begin a take; sound comes through the port as `TakeSound`. `keepAs` names the take in the device's own storage. */
-  | { kind: "begin"; sampleRate: number; sound: MessagePort; keepAs: string }
+  /** Begin a take; sound comes through the port as `TakeSound`. `keepAs` names the take in the device's own storage; it is as long as a take may be unless `mostS` says otherwise. */
+  | { kind: "begin"; sampleRate: number; sound: MessagePort; keepAs: string; mostS?: number }
   /** Judge the take: behind its end mark where one is on its way, at once where the sound broke off without one. */
   | { kind: "judge"; endIsComing: boolean }
   /** Judge sound that is there already: kept before a reload, read from a file, or a part of a take. */

@@ -15,7 +15,7 @@ interface Head {
   sampleRate: number;
 }
 
-const mark = "larkspan.take";
+const usualMark = "larkspan.take";
 const dayMs = 86_400_000;
 const storeOf = (() => {
   let store: ReturnType<typeof createStore> | null = null;
@@ -25,8 +25,8 @@ const headKey = (id: string) => `head/${id}`;
 const resultKey = (id: string) => `result/${id}`;
 const partKey = (id: string, index: number) => `part/${id}/${String(index).padStart(4, "0")}`;
 
-/** The id of the take this tab has open; another tab's take is none of its business. */
-export function takeOfThisTab(): string | null {
+/** The id of the take this tab has open; another tab's take is none of its business. Pages of their own kind have their own mark. */
+export function takeOfThisTab(mark = usualMark): string | null {
   try {
     return sessionStorage.getItem(mark);
   } catch {
@@ -34,7 +34,7 @@ export function takeOfThisTab(): string | null {
   }
 }
 
-export function markTakeOfThisTab(id: string | null): void {
+export function markTakeOfThisTab(id: string | null, mark = usualMark): void {
   try {
     if (id === null) sessionStorage.removeItem(mark);
     else sessionStorage.setItem(mark, id);

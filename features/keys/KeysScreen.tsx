@@ -5,22 +5,23 @@ import { Button } from "@/features/ui/Button";
 import { LinkButton } from "@/features/ui/LinkButton";
 import { Notice } from "@/features/ui/Notice";
 import { Screen } from "@/features/ui/Screen";
-import { Select } from "@/features/ui/Select";
 import { Skeleton } from "@/features/ui/Skeleton";
 import { Text } from "@/features/ui/Text";
 import { useLayout } from "@/features/ui/useLayout";
 import type { Song } from "@/shared/contract/song";
+import { PinBar } from "./compare/PinBar";
+import { usePinning } from "./compare/pins";
 import { DecidedLine } from "./decision/DecidedLine";
 import { KeyDeck } from "./deck/KeyDeck";
-import { KeyLegend } from "./KeyLegend";
 import { KeyList } from "./deck/KeyList";
-import { keyOrders, sortedRows, type KeyOrder, type KeyRow } from "./keyRows";
+import { MoveByHand } from "./deck/MoveByHand";
+import type { KeyRow } from "./keyRows";
 import { KeysMissing } from "./KeysMissing";
-import { KeyTable } from "./table/KeyTable";
-import type { TableWay } from "./table/KeyTableRow";
 import { roomWords } from "./partWords";
 import { ReachLine } from "./ReachLine";
 import { songWords } from "./songWords";
+import type { FoundWays } from "./table/tableWays";
+import { WideKeys } from "./table/WideKeys";
 import { decidedHere, decidedWords, type SongKeys } from "./useSongKeys";
 
 export interface KeysScreenProps {
@@ -29,18 +30,20 @@ export interface KeysScreenProps {
   /** the voice is still being fetched */
   pending: boolean;
   voice: { id: string; name: string } | null;
-  wayOf: (row: KeyRow) => TableWay;
+  /** the ways to play each key, on the wide screen */
+  waysOf: (row: KeyRow) => FoundWays;
   /** what the ways are played on: its id, its strings in words, and the list to choose from */
   instrument: { id: string; strings: string; chooser: ReactNode };
 }
 
 /** All twelve keys: cards and a short list on the phone, one table on the wide screen. */
-export function KeysScreen({ song, keys, pending, voice, wayOf, instrument }: KeysScreenProps) {
+export function KeysScreen({ song, keys, pending, voice, waysOf, instrument }: KeysScreenProps) {
   const router = useRouter();
   const layout = useLayout();
   const [chosen, setChosen] = useState<number | null>(null);
-  const [order, setOrder] = useState<KeyOrder>("score");
   const { rows, decision } = keys;
+  const pinning = usePinning(song.id, rows);
+  const look = (row: KeyRow) => setChosen(row.shift);
   const selected = rows?.find((row) => row.shift === chosen) ?? keys.inHand?.row ?? rows?.[0] ?? null;
   const isMine = selected !== null && decidedHere(keys, selected.shift) !== null;
   const markOf = (row: KeyRow) => decidedWords(keys, row.shift);
@@ -54,7 +57,7 @@ export function KeysScreen({ song, keys, pending, voice, wayOf, instrument }: Ke
       },
       done,
     );
-  const waysOf = (row: KeyRow) => ({
+  const pageOf = (row: KeyRow) => ({
     pathname: "/songs/[id]/ways" as const,
     params: { id: song.id, key: row.key.tonic, shift: String(row.shift) },
   });
@@ -63,7 +66,7 @@ export function KeysScreen({ song, keys, pending, voice, wayOf, instrument }: Ke
   const back = { label: song.title, href: { pathname: "/songs/[id]" as const, params: { id: song.id } } };
   const actions = selected && (
     <>
-      <LinkButton kind="secondary" small href={waysOf(selected)} label={`Ways to play ${selected.sign}`} />
+      <LinkButton kind="secondary" small href={pageOf(selected)} label={`Ways to play ${selected.sign}`} />
       <Button
         small
         disabled={isMine}
@@ -108,59 +111,37 @@ export function KeysScreen({ song, keys, pending, voice, wayOf, instrument }: Ke
             </Text>
           )}
           {wide ? (
-            <>
-              <Text tone="soft" style={{ lineHeight: 32, marginBottom: 10 }}>
-                {"Show the "}
-                <Select
-                  inline
-                  label="Order of the keys"
-                  value={order}
-                  options={keyOrders}
-                  onChange={setOrder}
-                  testID="key-order"
-                />
-                {keys.written ? (
-                  <>
-                    {", played on "}
-                    {instrument.chooser}.
-                  </>
-                ) : (
-                  ". The song has no chords yet, so no ways to play it are shown."
-                )}
-              </Text>
-              <KeyTable
-                rows={sortedRows(rows, order)}
-                voice={keys.voice}
-                selected={selected}
-                onSelect={(row) => setChosen(row.shift)}
-                order={order}
-                onOrder={setOrder}
-                wayOf={wayOf}
-                instrument={keys.written ? instrument.strings : null}
-                markOf={markOf}
-              />
-              <KeyLegend>{roomWords(selected)}</KeyLegend>
-            </>
+            <WideKeys
+              rows={rows}
+              voice={keys.voice}
+              selected={selected}
+              onSelect={look}
+              pinning={pinning}
+              waysOf={waysOf}
+              instrument={keys.written ? instrument : null}
+              markOf={markOf}
+            />
           ) : (
             <>
-              <KeyDeck rows={rows} voice={keys.voice} selected={selected} onSelect={(row) => setChosen(row.shift)} />
+              <KeyDeck rows={rows} voice={keys.voice} selected={selected} onSelect={look} pinning={pinning} />
               {phone && (
                 <Button
                   label={`Use ${selected.sign}, see ways to play it`}
                   busy={keys.saving}
                   onPress={() =>
-                    isMine ? router.push(waysOf(selected)) : take(selected, () => router.push(waysOf(selected)))
+                    isMine ? router.push(pageOf(selected)) : take(selected, () => router.push(pageOf(selected)))
                   }
                   testID="take-key"
-                  style={{ marginTop: 12 }}
+                  style={{ marginTop: 4 }}
                 />
               )}
               <KeyList
                 rows={rows}
                 voice={keys.voice}
                 selected={selected}
-                onSelect={(row) => setChosen(row.shift)}
+                onSelect={look}
                 markOf={markOf}
+                pinned={pinning.has}
               />
               <Text variant="small" tone="soft" testID="room-words" style={{ marginTop: 8 }}>
                 {roomWords(selected)}
@@ -172,6 +153,8 @@ export function KeysScreen({ song, keys, pending, voice, wayOf, instrument }: Ke
               <DecidedLine keys={keys} />
             </View>
           )}
+          <MoveByHand rows={rows} voice={keys.voice} selected={selected} onSelect={look} />
+          <PinBar songId={song.id} pinning={pinning} />
         </>
       )}
     </Screen>

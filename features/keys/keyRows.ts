@@ -33,18 +33,11 @@ export interface KeyRow {
   span: string;
   marks: KeyMark[];
   chords: string[];
+  /** as the engine judged it */
+  judged: KeyScore;
   /** the whole row as a sentence or two */
   spoken: string;
 }
-
-export type KeyOrder = "score" | "move" | "below" | "above";
-
-export const keyOrders: readonly { value: KeyOrder; label: string }[] = [
-  { value: "score", label: "best score first" },
-  { value: "move", label: "nearest to the chart first" },
-  { value: "above", label: "most room above first" },
-  { value: "below", label: "most room below first" },
-];
 
 /** Scores as rows, best first. `chordsIn` gives the song's chords in a key. */
 export function keyRows(
@@ -75,23 +68,10 @@ export function keyRows(
       span,
       marks: score.marks,
       chords: chordsIn(key).map(glyphs),
+      judged: score,
       spoken: `${sign}, ${points} of 100. The tune runs ${span}. ${reason}`,
     };
   });
-}
-
-/** The rows in the order asked for; rows that are equal in it stay best first. */
-export function sortedRows(rows: readonly KeyRow[], order: KeyOrder): KeyRow[] {
-  const cost: Record<KeyOrder, (row: KeyRow, place: number) => number> = {
-    score: (_, place) => place,
-    move: (row) => Math.abs(row.shift),
-    above: (row) => -row.above.semitones,
-    below: (row) => -row.below.semitones,
-  };
-  return rows
-    .map((row, place) => ({ row, cost: cost[order](row, place), place }))
-    .sort((a, b) => a.cost - b.cost || a.place - b.place)
-    .map(({ row }) => row);
 }
 
 /** The row of a tonic and move; the same tonic in another octave where the move is not among them. */

@@ -12,6 +12,8 @@ export interface LadderShift {
   max: number;
   /** the key it leads to, glyphs: "F" */
   name: string;
+  /** what is said of it besides, such as its score */
+  says?: string;
   onChange: (semitones: number) => void;
 }
 
@@ -75,7 +77,7 @@ export function ShiftHandle({
       aria-valuemin={shift.min}
       aria-valuemax={shift.max}
       aria-valuenow={shift.value}
-      aria-valuetext={`${shift.name}, ${shiftWords(shift.value)}`}
+      aria-valuetext={[shift.name, shiftWords(shift.value), shift.says].filter(Boolean).join(", ")}
       {...webProps({
         tabIndex: 0,
         "aria-orientation": "vertical",

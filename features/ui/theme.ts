@@ -101,5 +101,5 @@ form{margin:0}
 .skip:focus{top:8px}
 @media (hover:hover){[role=button]:not([disabled]):not([aria-disabled=true]):hover,button:not([disabled]):hover,a[data-button]:hover{filter:brightness(.94)}}
 @media (prefers-reduced-motion:reduce){*,*::before,*::after{animation-duration:.01ms!important;animation-iteration-count:1!important;transition-duration:.01ms!important;scroll-behavior:auto!important}}
-@media print{nav,[data-bar]{display:none!important}}
+@media print{nav,[data-bar]{display:none!important}:root:root{${properties("morning")};--paper:#FFFFFF}}
 `;

@@ -38,9 +38,9 @@ async function search({ chords, from, instrument, wishes }: Playing, to: KeyName
   return findWays({ chords, from, to, instrument, preferences: preferencesOf(wishes) });
 }
 
-/** The best way into each key: undefined while it is searched, null where there is none. */
-export function useBestWays(playing: Playing | null, keys: readonly KeyName[]): (Way | null | undefined)[] {
+/** The ways into each key, best first: undefined while they are searched, null where there is nothing to search. */
+export function useFoundWays(playing: Playing | null, keys: readonly KeyName[]): (readonly Way[] | null | undefined)[] {
   const results = useQueries({ queries: keys.map((key) => wayQueries.into(playing, key)) });
   const idle = playing === null || playing.chords.length === 0;
-  return results.map(({ data, error }) => (data ? (data[0] ?? null) : idle || error ? null : undefined));
+  return results.map(({ data, error }) => data ?? (idle || error ? null : undefined));
 }

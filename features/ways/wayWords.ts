@@ -39,6 +39,17 @@ export function shortCost(way: Pick<Way, "difficulty" | "retune" | "strings" | "
   return `${difficultyWord(way.difficulty)}, ${retuned}`;
 }
 
+/** A way as a row of a table shows and weighs it. */
+export function wayInRow(way: Way) {
+  return {
+    title: shortWay(way),
+    cost: shortCost(way),
+    capo: way.capo,
+    barres: way.chords.filter(({ shape }) => shape !== null && shape.barre !== null).length,
+    difficulty: way.difficulty,
+  };
+}
+
 /** The way that was kept with a decision, among those found now. */
 export function wayKept(ways: readonly Way[], kept: Pick<Way, "retune" | "capo" | "shapeKey"> | null): Way | null {
   if (kept === null) return null;

@@ -9,8 +9,8 @@ import { SongState } from "@/features/songs/SongState";
 import { songQueries } from "@/features/songs/songQueries";
 import { useLayout } from "@/features/ui/useLayout";
 import { useSingingVoice } from "@/features/voice/useSingingVoice";
-import { useBestWays } from "@/features/ways/wayQueries";
-import { shortCost, shortWay } from "@/features/ways/wayWords";
+import { useFoundWays } from "@/features/ways/wayQueries";
+import { wayInRow } from "@/features/ways/wayWords";
 import { useWishes } from "@/features/ways/wishes";
 import type { Song } from "@/shared/contract/song";
 
@@ -31,7 +31,7 @@ function Keys({ song }: { song: Song }) {
   const wide = useLayout() === "wide";
   const rows = keys.rows ?? [];
   // Only the table shows a way in every row; the phone asks for the ways of one key, on their own page.
-  const best = useBestWays(
+  const found = useFoundWays(
     wide && keys.written ? { ...keys.written, instrument, wishes } : null,
     rows.map((row) => row.key),
   );
@@ -41,9 +41,9 @@ function Keys({ song }: { song: Song }) {
       keys={keys}
       pending={singer.isPending}
       voice={singer.voice}
-      wayOf={(row) => {
-        const way = best[rows.indexOf(row)];
-        return way ? { title: shortWay(way), cost: shortCost(way) } : way;
+      waysOf={(row) => {
+        const ways = found[rows.indexOf(row)];
+        return ways ? ways.map(wayInRow) : ways;
       }}
       instrument={{
         id: instrument.id,

@@ -2,10 +2,12 @@ import { useState } from "react";
 import { Pressable, View } from "react-native";
 import { VoiceStrip, VoiceStripHeader } from "@/features/span/VoiceStrip";
 import { Button } from "@/features/ui/Button";
+import { Icon } from "@/features/ui/Icon";
 import { KeySign } from "@/features/ui/KeySign";
 import { Text } from "@/features/ui/Text";
 import { colors } from "@/features/ui/theme";
-import { webProps } from "@/features/ui/webStyle";
+import { unseen } from "@/features/ui/unseen";
+import { webProps, webStyle } from "@/features/ui/webStyle";
 import type { SingingVoice } from "@/shared/keys/keyScore";
 import { commonScale, spellingIn, type KeyRow } from "../keyRows";
 
@@ -18,12 +20,13 @@ export interface KeyListProps {
   onSelect: (row: KeyRow) => void;
   /** what is said of the decided key */
   markOf: (row: KeyRow) => string | null;
+  pinned: (row: KeyRow) => boolean;
 }
 
 const nextShown = 4;
 
 /** The other keys in short rows: the next four, or all twelve. A press brings a key's card to the front. */
-export function KeyList({ rows, voice, selected, onSelect, markOf }: KeyListProps) {
+export function KeyList({ rows, voice, selected, onSelect, markOf, pinned }: KeyListProps) {
   const [all, setAll] = useState(false);
   const shown = all ? rows : rows.filter((row) => row !== selected).slice(0, nextShown);
   const scale = commonScale(
@@ -68,8 +71,14 @@ export function KeyList({ rows, voice, selected, onSelect, markOf }: KeyListProp
                 backgroundColor: row === selected ? colors.card : "transparent",
               }}
             >
-              <View style={{ width: 44 }}>
+              <View style={{ width: 44, flexDirection: "row", alignItems: "center" }}>
                 <KeySign of={row.key} size={20} stacked />
+                {pinned(row) && (
+                  <>
+                    <Icon name="bookmarkFilled" size={14} color={colors.plum} />
+                    <Text style={webStyle(unseen)}>pinned</Text>
+                  </>
+                )}
               </View>
               <View aria-hidden>
                 <VoiceStrip voice={voice} marks={row.marks} scale={scale} width={112} spelling={spellingIn(row.key)} />

@@ -1,10 +1,12 @@
 import { fireEvent, render, screen, within } from "@testing-library/react";
 import { useState } from "react";
 import type { Song } from "@/shared/contract/song";
-import { sortedRows, wholeVoice, type KeyOrder, type KeyRow } from "../keyRows";
+import { mostPins, turnPin } from "../compare/pins";
+import { wholeVoice, type KeyRow } from "../keyRows";
 import { KeyTable } from "./KeyTable";
-import type { TableWay } from "./KeyTableRow";
+import { bestFirst, sortedRows, type KeyOrder } from "./keyOrder";
 import { tableColumns } from "./tableColumns";
+import type { TableWay } from "./tableWays";
 import { keyRowsOf } from "../songKeys";
 
 const song: Song = {
@@ -24,6 +26,7 @@ const song: Song = {
 };
 const singing = { range: { lowMidi: 51, highMidi: 74 }, comfort: { lowMidi: 55, highMidi: 70 } };
 const rows = keyRowsOf(song, singing) ?? [];
+const way: TableWay = { title: "Capo 5", cost: "easy", capo: 5, barres: 0, difficulty: 0.1 };
 
 const atWidth = (width: number) => {
   window.innerWidth = width;
@@ -33,23 +36,29 @@ const atWidth = (width: number) => {
 beforeEach(() => atWidth(1440));
 
 interface PageProps {
-  wayOf?: (row: KeyRow) => TableWay;
+  wayOf?: (row: KeyRow) => TableWay | null | undefined;
   instrument?: string | null;
   markOf?: (row: KeyRow) => string | null;
+  among?: readonly KeyRow[];
 }
 
-function Page({ wayOf = () => null, instrument = "A D F♯", markOf = () => null }: PageProps) {
-  const [selected, setSelected] = useState<KeyRow | null>(rows[0] ?? null);
-  const [order, setOrder] = useState<KeyOrder>("score");
+function Page({ wayOf = () => null, instrument = "A D F♯", markOf = () => null, among = rows }: PageProps) {
+  const [selected, setSelected] = useState<KeyRow | null>(among[0] ?? null);
+  const [order, setOrder] = useState<KeyOrder>(bestFirst);
+  const [pins, setPins] = useState<readonly number[]>([]);
+  const facts = { pinned: (row: KeyRow) => pins.includes(row.shift), wayOf };
   return (
     <KeyTable
-      rows={sortedRows(rows, order)}
+      {...facts}
+      rows={sortedRows(among, order, facts)}
+      all={among}
       voice={wholeVoice(singing)}
       selected={selected}
       onSelect={setSelected}
+      pinRoom={pins.length < mostPins}
+      onPin={(row) => setPins(turnPin(pins, row.shift))}
       order={order}
       onOrder={setOrder}
-      wayOf={wayOf}
       instrument={instrument}
       markOf={markOf}
     />
@@ -57,8 +66,7 @@ function Page({ wayOf = () => null, instrument = "A D F♯", markOf = () => null
 }
 
 const bodyRows = () => within(screen.getByRole("table")).getAllByRole("row").slice(1);
-const signOf = (row: HTMLElement) =>
-  within(row).getByRole("rowheader").firstElementChild?.firstElementChild?.textContent;
+const signOf = (row: HTMLElement) => within(row).getByRole("rowheader").querySelector("span > span")?.textContent;
 
 test("it is a real table: a caption, eight column heads, twelve rows with row heads", () => {
   render(<Page />);
@@ -82,9 +90,44 @@ test("the heads sort, and say which one does", () => {
   expect(screen.getByRole("columnheader", { name: /Score/ }).getAttribute("aria-sort")).toBe("descending");
   fireEvent.click(screen.getByRole("button", { name: /Key, semitones/ }));
   expect(screen.getByRole("columnheader", { name: /Key, semitones/ }).getAttribute("aria-sort")).toBe("ascending");
-  expect(screen.getByRole("columnheader", { name: /Score/ }).getAttribute("aria-sort")).toBeNull();
+  expect(screen.getByRole("columnheader", { name: /Score/ }).getAttribute("aria-sort")).toBe("none");
   const moves = bodyRows().map((row) => Math.abs(rows.find((each) => each.sign === signOf(row))?.shift ?? 99));
   expect(moves).toEqual([...moves].sort((a, b) => a - b));
+  fireEvent.click(screen.getByRole("button", { name: /Key, semitones/ }));
+  expect(screen.getByRole("columnheader", { name: /Key, semitones/ }).getAttribute("aria-sort")).toBe("descending");
+  expect(signOf(bodyRows().at(-1)!)).toBe(rows.find(({ shift }) => Math.abs(shift) === Math.min(...moves))?.sign);
+});
+
+test("every column can put the rows in its order", () => {
+  render(<Page wayOf={() => way} />);
+  for (const name of [
+    "Pinned",
+    "Key, semitones from written",
+    "Score",
+    "Span",
+    "Room below",
+    "Room above",
+    "Chords",
+    "Best way",
+  ]) {
+    const head = screen.getByRole("columnheader", { name: new RegExp(`^${name}`) });
+    fireEvent.click(within(head).getByRole("button"));
+    expect(head.getAttribute("aria-sort")).toMatch(/^(a|de)scending$/);
+  }
+});
+
+test("four keys can be pinned; a fifth waits until one is unpinned", () => {
+  render(<Page />);
+  const pins = screen.getAllByRole("button", { name: /^Pin / });
+  expect(pins).toHaveLength(12);
+  pins.slice(0, 5).forEach((pin) => fireEvent.click(pin));
+  const pressed = () => pins.filter((pin) => pin.getAttribute("aria-pressed") === "true");
+  expect(pressed()).toEqual(pins.slice(0, 4));
+  expect(pins[4]!.getAttribute("aria-disabled")).toBe("true");
+  expect(pins[4]!.title).toMatch(/^Four keys are pinned/);
+  fireEvent.click(pins[0]!);
+  fireEvent.click(pins[4]!);
+  expect(pressed()).toEqual(pins.slice(1, 5));
 });
 
 test("a key is chosen by its radio button or anywhere in its row", () => {
@@ -105,7 +148,7 @@ test("a way that is still searched, one found and none are told apart", () => {
         row === first
           ? undefined
           : row === second
-            ? { title: "Capo 5, shapes of G", cost: "easy, nothing retuned" }
+            ? { ...way, title: "Capo 5, shapes of G", cost: "easy, nothing retuned" }
             : null
       }
     />,
@@ -117,7 +160,7 @@ test("a way that is still searched, one found and none are told apart", () => {
 
 test("on a narrower screen no column hides: chords stand over the best way", () => {
   atWidth(1100);
-  render(<Page wayOf={() => ({ title: "Capo 5", cost: "easy" })} />);
+  render(<Page wayOf={() => way} />);
   expect(screen.getAllByRole("columnheader")).toHaveLength(7);
   const inC = bodyRows().find((row) => signOf(row) === "C")!;
   expect(within(inC).getAllByRole("cell").at(-1)?.textContent).toBe("CFGAmCapo 5easy");
@@ -164,19 +207,7 @@ test("the picture is as high as its row", () => {
 
 test("a mode is small beside its tonic, and spoken in full", () => {
   const modal = keyRowsOf({ ...song, writtenKey: { tonic: "G", mode: "mixolydian" } }, singing) ?? [];
-  render(
-    <KeyTable
-      rows={modal}
-      voice={wholeVoice(singing)}
-      selected={null}
-      onSelect={() => undefined}
-      order="score"
-      onOrder={() => undefined}
-      wayOf={() => null}
-      instrument={null}
-      markOf={() => null}
-    />,
-  );
+  render(<Page among={modal} instrument={null} />);
   expect(within(bodyRows()[0]!).getByText("mixo.").getAttribute("aria-hidden")).toBe("true");
   expect(screen.getAllByRole("rowheader", { name: /mixolydian/ })).toHaveLength(12);
 });

@@ -1,14 +1,14 @@
 import { useLayoutEffect, useRef, useState, type CSSProperties, type ReactNode, type RefObject } from "react";
+import { Icon } from "@/features/ui/Icon";
 import { setSigns } from "@/features/ui/textSigns";
 import { colors, fonts } from "@/features/ui/theme";
 import { unseen } from "@/features/ui/unseen";
 import { keySignParts } from "@/shared/music/keyWords";
 import { glyphs } from "@/shared/music/pitch";
 import type { KeyRow, Room } from "../keyRows";
+import { cell, firstColumn, secondColumn } from "./tableCells";
 import type { TableColumns } from "./tableColumns";
-
-/** The best way to play a key, in two short lines; undefined while it is searched, null where there is none. */
-export type TableWay = { title: string; cost: string } | null | undefined;
+import type { TableWay } from "./tableWays";
 
 export interface KeyTableRowProps {
   row: KeyRow;
@@ -16,9 +16,14 @@ export interface KeyTableRowProps {
   group: string;
   on: boolean;
   onSelect: () => void;
+  pinned: boolean;
+  /** whether one more key can be pinned */
+  pinRoom: boolean;
+  onPin: () => void;
   /** where the chords stand */
   chords: TableColumns["chords"];
-  way: TableWay;
+  /** the best way to play it; undefined while it is searched, null where there is none */
+  way: TableWay | null | undefined;
   /** what is said of the decided key */
   mark: string | null;
   /** the picture, for a row of this height */
@@ -28,7 +33,20 @@ export interface KeyTableRowProps {
 const usualHeight = 51;
 
 /** One key as a row of the table. Its picture is drawn as high as the words beside it make the row. */
-export function KeyTableRow({ row, group, on, onSelect, chords, way, mark, children }: KeyTableRowProps) {
+export function KeyTableRow({
+  row,
+  group,
+  on,
+  onSelect,
+  pinned,
+  pinRoom,
+  onPin,
+  chords,
+  way,
+  mark,
+  children,
+}: KeyTableRowProps) {
+  const [focused, setFocused] = useState(false);
   const line = useRef<HTMLTableRowElement>(null);
   const height = useHeight(line);
   const parts = keySignParts(row.key);
@@ -51,17 +69,36 @@ export function KeyTableRow({ row, group, on, onSelect, chords, way, mark, child
             }}
           />
         )}
+        <PinButton sign={row.sign} pinned={pinned} room={pinRoom} onPin={onPin} />
+      </td>
+      <th scope="row" style={{ ...td, ...secondColumn, textAlign: "left", fontWeight: 400 }}>
         <input
           type="radio"
           name={group}
           checked={on}
           onChange={onSelect}
+          onFocus={() => setFocused(true)}
+          onBlur={() => setFocused(false)}
           aria-label={`${row.sign}, ${row.moved}`}
-          style={{ width: 18, height: 18, margin: 0, display: "block", accentColor: colors.plum }}
+          style={{
+            position: "absolute",
+            inset: 0,
+            width: "100%",
+            height: "100%",
+            margin: 0,
+            opacity: 0,
+            cursor: "pointer",
+          }}
         />
-      </td>
-      <th scope="row" style={{ ...td, ...secondColumn, textAlign: "left", fontWeight: 400 }}>
-        <span style={{ display: "flex", flexWrap: "wrap", alignItems: "center", columnGap: 6 }}>
+        <span
+          style={{
+            ...(focused ? { outline: `2px solid ${colors.plum}`, outlineOffset: 3, borderRadius: 4 } : null),
+            display: "flex",
+            flexWrap: "wrap",
+            alignItems: "center",
+            columnGap: 6,
+          }}
+        >
           <span style={{ font: `700 26px/1 ${fonts.display}`, minWidth: 36, color: faint }}>
             {setSigns(glyphs(parts.large))}
             {parts.mode !== "" && (
@@ -163,7 +200,47 @@ function Chords({ names, on, color }: { names: readonly string[]; on: boolean; c
   );
 }
 
-function BestWay({ way, on, color }: { way: TableWay; on: boolean; color: string }) {
+interface PinButtonProps {
+  sign: string;
+  pinned: boolean;
+  room: boolean;
+  onPin: () => void;
+}
+
+function PinButton({ sign, pinned, room, onPin }: PinButtonProps) {
+  const full = !pinned && !room;
+  const what = pinned ? `Unpin ${sign}` : `Pin ${sign} to compare it`;
+  return (
+    <button
+      type="button"
+      aria-pressed={pinned}
+      aria-disabled={full || undefined}
+      aria-label={`Pin ${sign}`}
+      title={full ? `Four keys are pinned, the most there can be. Unpin one to pin ${sign}.` : what}
+      data-testid={`pin-${sign}`}
+      onClick={(event) => {
+        event.stopPropagation();
+        if (!full) onPin();
+      }}
+      style={{ ...pin, color: pinned ? colors.plum : colors.inkSoft, opacity: full ? 0.45 : 1 }}
+    >
+      <Icon name={pinned ? "bookmarkFilled" : "bookmark"} size={20} />
+    </button>
+  );
+}
+
+const pin: CSSProperties = {
+  background: "none",
+  border: 0,
+  padding: 0,
+  width: 28,
+  height: 48,
+  cursor: "pointer",
+  display: "flex",
+  alignItems: "center",
+};
+
+function BestWay({ way, on, color }: { way: TableWay | null | undefined; on: boolean; color: string }) {
   if (way === undefined)
     return (
       <span style={{ display: "block", height: 12, width: 120, borderRadius: 6, background: colors.line }}>
@@ -189,7 +266,3 @@ function RoomCell({ room, style, strong }: { room: Room; style: CSSProperties; s
     </td>
   );
 }
-
-export const cell: CSSProperties = { padding: 0, boxSizing: "border-box", verticalAlign: "middle" };
-export const firstColumn: CSSProperties = { position: "sticky", left: 0, zIndex: 1 };
-export const secondColumn: CSSProperties = { position: "sticky", left: 28, zIndex: 1 };

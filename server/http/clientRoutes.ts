@@ -13,6 +13,8 @@ export const clientRoutes = [
   "/songs/:id/edit",
   "/songs/:id/history",
   "/songs/:id/keys",
+  "/songs/:id/compare",
+  "/songs/:id/together",
   "/songs/:id/ways",
   "/songs/:id/melody",
   "/songs/:id/recording",

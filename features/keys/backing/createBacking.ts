@@ -4,6 +4,7 @@ import { type BackingSounds, createBackingSounds } from "./backingSounds";
 /** Sound is given to the device this far ahead of its time, in looks this far apart. */
 const aheadS = 0.2;
 const lookMs = 25;
+const lookOfflineS = 0.1;
 /** A page that is not seen is looked after once a second only. */
 const aheadUnseenS = 2.5;
 /** From the press to the first sound, beside what the device takes. */
@@ -59,7 +60,7 @@ interface Leg {
 }
 
 /**
- * Plays a plan in an audio context. In an offline context everything is scheduled when it starts.
+ * Plays a plan in an audio context. In an offline context it starts with the context.
  *
  * @param sounds those of this context; plans in several keys share their strings
  * @param onEnded called when the song has ended by itself
@@ -131,6 +132,18 @@ export function createBacking(
     setTimeout(() => ending.disconnect(), 1000 * fadeS + 50);
   };
 
+  /** An offline context stops at every look, as if the time had come to it. */
+  const renderAhead = (from: number) => {
+    if (!(context instanceof OfflineAudioContext)) return;
+    giveUpTo(from + aheadS);
+    for (let at = from + lookOfflineS; at < context.length / context.sampleRate; at += lookOfflineS) {
+      void context.suspend(at).then(() => {
+        giveUpTo(at + aheadS);
+        return context.resume();
+      });
+    }
+  };
+
   const heard = () => {
     if (!run) return null;
     const now = context.currentTime - latencyS();
@@ -156,7 +169,7 @@ export function createBacking(
       addLeg(from, end, contextAt);
       beganAt = contextAt - from;
     }
-    if (!live) giveUpTo(Infinity);
+    if (!live) renderAhead(contextAt);
     else {
       const look = () => {
         const unseen = typeof document !== "undefined" && document.hidden;

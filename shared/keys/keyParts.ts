@@ -14,7 +14,7 @@ const sure: Readonly<KeyParts> = { comfort: 20, roomAbove: 6, roomBelow: 4, long
  * Room between the tune's ends and the ends of the range that is as good as any more, in semitones; reserves of 2 to 3
  * above and 1 to 2 below are the usual defaults.
  */
-export const roomEnough = { above: 4, below: 3 } as const;
+export const roomEnough = { above: 3, below: 2 } as const;
 
 /** A voice with its edges on whole semitones, as they are named to people. */
 export interface VoiceEdges {
@@ -57,22 +57,30 @@ export function voiceEdges(voice: SingingVoice): VoiceEdges {
  * The five parts of a key's score, whole points. Strain above costs, part by part, at least what weakness the same
  * distance below costs; widening range or comfort band lowers no part.
  *
- * @param pitches the tune in this key
+ * @param pitches the tune, low to high
  * @param edges the voice
+ * @param shift semitones that the tune is moved by
  * @returns points; their sum is the score
  * @see common practice: penalise high notes by the time spent there, keep 2-3 semitones above and 1-2 below (defaults)
  */
-export function keyParts(pitches: readonly TunePitch[], edges: VoiceEdges): KeyParts {
-  const low = pitches[0]!.midi;
-  const high = pitches[pitches.length - 1]!.midi;
-  const outside = total(pitches, ({ midi, share }) => (midi < edges.rangeLow || midi > edges.rangeHigh ? share : 0));
+export function keyParts(pitches: readonly TunePitch[], edges: VoiceEdges, shift = 0): KeyParts {
+  let [outside, comfort, longHigh, lowCarry] = [0, 0, 0, 0];
+  for (const pitch of pitches) {
+    const midi = pitch.midi + shift;
+    if (midi < edges.rangeLow || midi > edges.rangeHigh) outside += pitch.share;
+    comfort += pitch.share * discomfort(midi, edges);
+    longHigh += pitch.heldShare * ramp(midi - edges.comfortHigh + 3);
+    lowCarry += pitch.share * ramp(edges.comfortLow + 3 - midi);
+  }
+  const above = edges.rangeHigh - (pitches[pitches.length - 1]!.midi + shift);
+  const below = pitches[0]!.midi + shift - edges.rangeLow;
   const losses: KeyParts = {
-    comfort: capped(total(pitches, ({ midi, share }) => share * discomfort(midi, edges))),
-    roomAbove: capped((roomEnough.above - (edges.rangeHigh - high)) / roomEnough.above),
-    roomBelow: capped((roomEnough.below - (low - edges.rangeLow)) / roomEnough.below),
-    longHigh: capped(12 * total(pitches, ({ midi, heldShare }) => heldShare * ramp(midi - edges.comfortHigh + 3))),
+    comfort: capped(comfort),
+    roomAbove: capped((roomEnough.above - above) / roomEnough.above),
+    roomBelow: capped((roomEnough.below - below) / roomEnough.below),
+    longHigh: capped(12 * longHigh),
     // At most two thirds, so that in points it stays below what the same distance above costs.
-    lowCarry: (2 / 3) * capped(4.5 * total(pitches, ({ midi, share }) => share * ramp(edges.comfortLow + 3 - midi))),
+    lowCarry: (2 / 3) * capped(4.5 * lowCarry),
   };
   const points = (part: keyof KeyParts) => {
     const base = sure[part];
@@ -112,10 +120,6 @@ function ramp(semitones: number): number {
 
 function capped(value: number): number {
   return Math.min(1, Math.max(0, value));
-}
-
-function total(pitches: readonly TunePitch[], cost: (pitch: TunePitch) => number): number {
-  return pitches.reduce((sum, pitch) => sum + cost(pitch), 0);
 }
 
 /** Rounds to whole points after dropping the last digits, in which two equal tunes may differ. */

@@ -26,7 +26,5 @@ export function compareTies(mode: Mode, presentKey: string): (a: { tonic: string
   const accidentals = ({ tonic }: { tonic: string }) => Math.abs(keyFifths({ tonic, mode }));
   const distance = ({ tonic }: { tonic: string }) => Math.abs(nearestMove(present, tonicPitchClass(tonic)));
   return (a, b) =>
-    accidentals(a) - accidentals(b) ||
-    distance(a) - distance(b) ||
-    tonicPitchClass(a.tonic) - tonicPitchClass(b.tonic);
+    accidentals(a) - accidentals(b) || distance(a) - distance(b) || tonicPitchClass(a.tonic) - tonicPitchClass(b.tonic);
 }

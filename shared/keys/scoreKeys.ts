@@ -66,26 +66,27 @@ function bestOctave(
   coarse: boolean,
 ): KeyScore {
   const near = nearestMove(home, tonicPc);
-  const choices = Array.from({ length: 2 * octavesAway + 1 }, (_, k) => {
-    const octave = k - octavesAway;
-    const shift = near + 12 * octave;
-    const moved = pitches.map((pitch) => ({ ...pitch, midi: pitch.midi + shift }));
-    const parts = keyParts(moved, edges);
-    const score = parts.comfort + parts.roomAbove + parts.roomBelow + parts.longHigh + parts.lowCarry;
-    return { octave, shift, moved, parts, score, reserves: reserves(moved, edges) };
-  });
-  const tooWide = pitches[pitches.length - 1]!.midi - pitches[0]!.midi > singable.widest;
+  const [lowest, highest] = [pitches[0]!.midi, pitches[pitches.length - 1]!.midi];
+  const tooWide = highest - lowest > singable.widest;
   // Below MIDI 0 notes have no names.
   const floor = tooWide ? singable.low : 0;
-  const outside = ({ moved }: { moved: readonly TunePitch[] }) =>
-    Math.max(0, floor - moved[0]!.midi) + (tooWide ? Math.max(0, moved[moved.length - 1]!.midi - singable.high) : 0);
-  const least = Math.min(...choices.map(outside));
-  const best = choices
-    .filter((choice) => outside(choice) === least)
+  const outside = (shift: number) =>
+    Math.max(0, floor - lowest - shift) + (tooWide ? Math.max(0, highest + shift - singable.high) : 0);
+  const octaves = Array.from({ length: 2 * octavesAway + 1 }, (_, k) => k - octavesAway);
+  const least = Math.min(...octaves.map((octave) => outside(near + 12 * octave)));
+  const best = octaves
+    .map((octave) => ({ octave, shift: near + 12 * octave }))
+    .filter(({ shift }) => outside(shift) === least)
+    .map(({ octave, shift }) => {
+      const parts = keyParts(pitches, edges, shift);
+      const score = parts.comfort + parts.roomAbove + parts.roomBelow + parts.longHigh + parts.lowCarry;
+      return { octave, shift, parts, score, reserves: reserves(lowest + shift, highest + shift, edges) };
+    })
     .reduce((a, b) => (compareOctaves(a, b) <= 0 ? a : b));
-  const { octave, shift, moved, parts, score } = best;
+  const { octave, shift, parts, score } = best;
   const tonic = spellTonic(tonicPc, mode);
-  const marks = moved.map(({ midi, share }): KeyMark => {
+  const marks = pitches.map(({ midi: written, share }): KeyMark => {
+    const midi = written + shift;
     return { midi, share, zone: zoneOf(midi, edges), home: pitchClass(midi) === tonicPc };
   });
   const beyond = marks.some(({ zone }) => zone === "beyond");
@@ -94,8 +95,8 @@ function bestOctave(
     tonic,
     octave,
     shift,
-    lowMidi: moved[0]!.midi,
-    highMidi: moved[moved.length - 1]!.midi,
+    lowMidi: lowest + shift,
+    highMidi: highest + shift,
     score,
     parts,
     beyond,
@@ -122,9 +123,9 @@ function compareOctaves(a: OctaveChoice, b: OctaveChoice): number {
   );
 }
 
-function reserves(pitches: readonly TunePitch[], edges: VoiceEdges): KeyScore["reserves"] {
-  const upper = edges.rangeHigh - pitches[pitches.length - 1]!.midi;
-  const lower = pitches[0]!.midi - edges.rangeLow;
+function reserves(low: number, high: number, edges: VoiceEdges): KeyScore["reserves"] {
+  const upper = edges.rangeHigh - high;
+  const lower = low - edges.rangeLow;
   return { upper, lower, tessituraShift: (lower - upper) / 2 };
 }
 

@@ -45,7 +45,9 @@ export function tunePitches(tune: Tune): TunePitch[] {
     if (!(note.duration > 0) || !Number.isFinite(note.duration) || !(note.midi >= 0 && note.midi <= 127))
       throw new RangeError("every note needs a MIDI pitch, 0 to 127, and a length above 0");
     const midi = Math.round(note.midi);
-    lengths.set(midi, [...(lengths.get(midi) ?? []), note.duration]);
+    const others = lengths.get(midi);
+    if (others) others.push(note.duration);
+    else lengths.set(midi, [note.duration]);
   }
   // Sorted before adding, so that the order of the notes cannot change a sum's last digit.
   const sums = [...lengths]

@@ -1,3 +1,5 @@
+import { strToU8 } from "fflate";
+import { type MidiEvent, parseMidi } from "midi-file";
 import { decodeText } from "./textBytes";
 
 /** A note of a MIDI track, in ticks. */
@@ -26,6 +28,7 @@ export interface MidiTracks {
 type Refusal = { ok: false; reason: string };
 
 const most = {
+  bytes: 2_000_000,
   notes: 100_000,
   atOnce: 256,
   strays: 2_000,
@@ -41,6 +44,15 @@ const tooLong: Refusal = { ok: false, reason: "This MIDI file lasts longer than 
 class Refused extends Error {
   constructor(readonly refusal: Refusal) {
     super(refusal.reason);
+  }
+}
+
+/** Bytes that let nobody read a stretch that is not there: lengths that a damaged file states lead nowhere. */
+class WatchedBytes extends Uint8Array {
+  override slice(from = 0, to = this.length): Uint8Array<ArrayBuffer> {
+    if (from < 0 || to < from || to > this.length) throw new Refused(damaged);
+    // Whatever is cut out of it is watched as well: a typed array cuts its own kind.
+    return super.slice(from, to);
   }
 }
 
@@ -60,18 +72,8 @@ export function readMidiTracks(bytes: Uint8Array): MidiTracks | Refusal {
   if (division === 0) return damaged;
   const file: MidiTracks = { ok: true, division, tracks: [], tempos: [], metres: [], keys: [] };
   const count = { notes: 0, events: 0, texts: 0 };
-  let place = 8 + uint32(bytes, 4);
   try {
-    while (place + 8 <= bytes.length) {
-      const end = place + 8 + uint32(bytes, place + 4);
-      if (end > bytes.length) return damaged;
-      if (hasTag(bytes, place, "MTrk")) {
-        if (file.tracks.length >= most.tracks)
-          return { ok: false, reason: "This MIDI file has far more tracks than a song." };
-        file.tracks.push(readTrack(bytes, place + 8, end, file, count));
-      }
-      place = end;
-    }
+    for (const events of parsed(bytes)) file.tracks.push(readTrack(events, file, count));
   } catch (error) {
     if (error instanceof Refused) return error.refusal;
     throw error;
@@ -81,78 +83,69 @@ export function readMidiTracks(bytes: Uint8Array): MidiTracks | Refusal {
   return file;
 }
 
+/** The events of each track. Chunks of unknown kind are left out, as the standard asks. */
+function parsed(bytes: Uint8Array): MidiEvent[][] {
+  const chunks: Uint8Array[] = [];
+  let place = 8 + uint32(bytes, 4);
+  while (place + 8 <= bytes.length) {
+    const end = place + 8 + uint32(bytes, place + 4);
+    if (end > bytes.length) throw new Refused(damaged);
+    if (hasTag(bytes, place, "MTrk")) chunks.push(bytes.subarray(place, end));
+    if (chunks.length > most.tracks)
+      throw new Refused({ ok: false, reason: "This MIDI file has far more tracks than a song." });
+    place = end;
+  }
+  const head = [...strToU8("MThd"), 0, 0, 0, 6, 0, 1, chunks.length >> 8, chunks.length & 0xff, bytes[12]!, bytes[13]!];
+  const size = chunks.reduce((sum, chunk) => sum + chunk.length, head.length);
+  if (size > most.bytes) throw new Refused(tooMany);
+  const file = new WatchedBytes(size);
+  file.set(head);
+  chunks.reduce((at, chunk) => (file.set(chunk, at), at + chunk.length), head.length);
+  try {
+    return parseMidi(file).tracks;
+  } catch {
+    // The library says in words of its own what is wrong with the bytes.
+    throw new Refused(damaged);
+  }
+}
+
 function readTrack(
-  bytes: Uint8Array,
-  from: number,
-  end: number,
+  events: readonly MidiEvent[],
   file: MidiTracks,
   count: { notes: number; events: number; texts: number },
 ): MidiTrack {
   const track: MidiTrack = { name: "", channels: new Map(), texts: [] };
   const sounding = new Map<number, MidiNote[]>();
-  let place = from;
   let tick = 0;
-  let status = 0;
   let held = 0;
   let strays = 0;
-  const quantity = (): number => {
-    let value = 0;
-    for (let digits = 0; digits < 4 && place < end; digits += 1) {
-      const byte = bytes[place]!;
-      place += 1;
-      value = value * 128 + (byte & 0x7f);
-      if (byte < 0x80) return value;
-    }
-    throw new Refused(damaged);
-  };
-  while (place < end) {
-    count.events += 1;
-    if (count.events > most.events) throw new Refused(tooMany);
-    tick += quantity();
+  count.events += events.length;
+  if (count.events > most.events) throw new Refused(tooMany);
+  for (const event of events) {
+    if (!(event.deltaTime >= 0)) throw new Refused(damaged);
+    tick += event.deltaTime;
     if (tick > most.quarters * file.division) throw new Refused(tooLong);
-    if (place >= end) throw new Refused(damaged);
-    const first = bytes[place]!;
-    if (first === 0xff || first === 0xf0 || first === 0xf7) {
-      const kind = first === 0xff ? bytes[place + 1]! : -1;
-      place += first === 0xff ? 2 : 1;
-      const length = quantity();
-      if (place + length > end) throw new Refused(damaged);
-      if (kind >= 0) readMeta(kind, bytes.subarray(place, place + length), tick, track, file, count);
-      place += length;
-      if (kind === 0x2f) break;
-      continue;
-    }
-    if (first >= 0x80) {
-      if (first > 0xf0) throw new Refused(damaged);
-      status = first;
-      place += 1;
-    } else if (status === 0) throw new Refused(damaged);
-    const kind = status & 0xf0;
-    const length = kind === 0xc0 || kind === 0xd0 ? 1 : 2;
-    if (place + length > end) throw new Refused(damaged);
-    const [one, two] = [bytes[place]!, bytes[place + 1] ?? 0];
-    place += length;
-    if (kind !== 0x80 && kind !== 0x90 && kind !== 0xc0) continue;
-    const channel = channelOf(track, status & 0x0f);
-    if (kind === 0xc0) channel.program ??= one & 0x7f;
-    else if (kind === 0x90 && two > 0) {
+    if (event.type === "endOfTrack") break;
+    if (event.type === "programChange") channelOf(track, event.channel).program ??= inByte(event.programNumber);
+    else if (event.type === "noteOn") {
       count.notes += 1;
       held += 1;
       if (count.notes > most.notes || held > most.atOnce) throw new Refused(tooMany);
-      const note = { tick, ticks: -1, midi: one & 0x7f };
-      channel.notes.push(note);
-      const name = ((status & 0x0f) << 7) | note.midi;
+      inByte(event.velocity);
+      const note = { tick, ticks: -1, midi: inByte(event.noteNumber) };
+      channelOf(track, event.channel).notes.push(note);
+      const name = (event.channel << 7) | note.midi;
       const before = sounding.get(name);
       if (before) before.push(note);
       else sounding.set(name, [note]);
-    } else {
-      const note = sounding.get(((status & 0x0f) << 7) | (one & 0x7f))?.shift();
+    } else if (event.type === "noteOff") {
+      const note = sounding.get((event.channel << 7) | inByte(event.noteNumber))?.shift();
       if (note) {
         note.ticks = tick - note.tick;
         held -= 1;
       } else strays += 1;
       if (strays > most.strays) throw new Refused(tooMany);
-    }
+    } else readMeta(event, tick, track, file, count);
   }
   // What was never let go sounds to the end of its track.
   for (const notes of sounding.values()) for (const note of notes) note.ticks = tick - note.tick;
@@ -165,30 +158,32 @@ function channelOf(track: MidiTrack, number: number) {
   return channel;
 }
 
-function readMeta(
-  kind: number,
-  data: Uint8Array,
-  tick: number,
-  track: MidiTrack,
-  file: MidiTracks,
-  count: { texts: number },
-): void {
-  if (kind === 1 || kind === 5) {
+function readMeta(event: MidiEvent, tick: number, track: MidiTrack, file: MidiTracks, count: { texts: number }): void {
+  if (event.type === "text" || event.type === "lyrics") {
     count.texts += 1;
-    if (count.texts <= most.texts)
-      track.texts.push({ tick, text: decodeText(data.subarray(0, 400)), lyric: kind === 5 });
-  } else if (kind === 3 && track.name === "") {
-    track.name = decodeText(data.subarray(0, 400))
+    if (count.texts <= most.texts) track.texts.push({ tick, text: textOf(event.text), lyric: event.type === "lyrics" });
+  } else if (event.type === "trackName" && track.name === "") {
+    track.name = textOf(event.text)
       .replace(/\p{Cc}/gu, "")
       .trim();
-  } else if (kind === 0x51 && data.length >= 3 && file.tempos.length < most.texts) {
-    const micros = data[0]! * 65_536 + data[1]! * 256 + data[2]!;
-    if (micros > 0) file.tempos.push({ tick, quartersAMinute: 60_000_000 / micros });
-  } else if (kind === 0x58 && data.length >= 2 && file.metres.length < most.texts) {
-    file.metres.push({ tick, beats: data[0]! });
-  } else if (kind === 0x59 && data.length >= 2 && file.keys.length < most.texts) {
-    file.keys.push({ tick, fifths: (data[0]! << 24) >> 24, minor: data[1] === 1 });
+  } else if (event.type === "setTempo" && event.microsecondsPerBeat > 0 && file.tempos.length < most.texts) {
+    file.tempos.push({ tick, quartersAMinute: 60_000_000 / event.microsecondsPerBeat });
+  } else if (event.type === "timeSignature" && file.metres.length < most.texts) {
+    file.metres.push({ tick, beats: event.numerator });
+  } else if (event.type === "keySignature" && file.keys.length < most.texts) {
+    file.keys.push({ tick, fifths: event.key, minor: event.scale === 1 });
   }
+}
+
+/** The library hands each byte of a text over as one character. */
+function textOf(text: string): string {
+  return decodeText(strToU8(text.slice(0, 400), true));
+}
+
+/** A value of a channel message; undefined where the track ends within it. */
+function inByte(value: number | undefined): number {
+  if (value === undefined) throw new Refused(damaged);
+  return value & 0x7f;
 }
 
 function hasTag(bytes: Uint8Array, place: number, tag: string): boolean {

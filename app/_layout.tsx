@@ -14,6 +14,7 @@ const parts: LazyPart[] = [
   () => import("./songs/[id]/index"),
   () => import("@/shared/songs/demoSongs"),
   () => import("./songs/[id]/keys"),
+  () => import("./songs/[id]/together"),
   () => import("./songs/[id]/ways"),
   () => import("@/shared/ways/findWays"),
   () => import("./songs/[id]/edit"),

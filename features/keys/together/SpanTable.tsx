@@ -1,0 +1,109 @@
+import type { CSSProperties } from "react";
+import { useWindowDimensions } from "react-native";
+import { KeySpan } from "@/features/span/KeySpan";
+import { keySpanWidth, keySpanX } from "@/features/span/keySpanGeometry";
+import { setSigns } from "@/features/ui/textSigns";
+import { colors, fonts, sizes } from "@/features/ui/theme";
+import { unseen } from "@/features/ui/unseen";
+import { spellingIn } from "../keyRows";
+import type { GroupKey } from "./groupKeys";
+import { octaveNote } from "./groupWords";
+import { groupScale } from "./groupScale";
+import { SpanScale } from "./SpanScale";
+
+const widths = { name: 190, score: 72, words: 320 } as const;
+const rowHeight = 51;
+
+/** Wide: each singer as a row, the tune over its own band, all on one scale. */
+export function SpanTable({ picked }: { picked: GroupKey }) {
+  const scale = groupScale(picked);
+  const room = Math.min(sizes.content, useWindowDimensions().width - sizes.rail - 2 * sizes.gutterWide);
+  const step = Math.min(14.4, (room - widths.name - widths.score - widths.words) / keySpanWidth(scale, 1));
+  const width = keySpanWidth(scale, step);
+  return (
+    <table data-testid="span-table" style={table}>
+      <caption style={unseen}>{`The tune in ${picked.sign} against each voice`}</caption>
+      <thead>
+        <tr>
+          <th scope="col" style={{ ...th, width: widths.name }}>
+            Singer
+          </th>
+          <th scope="col" style={{ ...th, width, padding: 0 }}>
+            <span style={unseen}>Span of the tune against the voice</span>
+            <SpanScale scale={scale} width={width} x={(midi) => keySpanX(midi, scale, step)} />
+          </th>
+          <th scope="col" style={{ ...th, width: widths.score, textAlign: "center" }}>
+            Score
+          </th>
+          <th scope="col" style={th}>
+            How it lies
+          </th>
+        </tr>
+      </thead>
+      <tbody>
+        {picked.parts.map((part) => (
+          <tr key={part.id} data-testid="span-row">
+            <th scope="row" style={{ ...td, textAlign: "left", paddingRight: 12 }}>
+              <span style={{ display: "block", font: `600 15px/18px ${fonts.text}`, overflowWrap: "anywhere" }}>
+                {setSigns(part.name)}
+              </span>
+              {part.octaves !== 0 && (
+                <span style={{ font: `500 13px/16px ${fonts.text}`, color: colors.inkSoft }}>
+                  {octaveNote(part.octaves)}
+                </span>
+              )}
+            </th>
+            <td style={{ ...td, lineHeight: 0 }}>
+              <KeySpan
+                voice={part.voice}
+                marks={part.marks}
+                scale={scale}
+                perSemitone={step}
+                height={rowHeight}
+                spelling={spellingIn(picked.key)}
+              />
+            </td>
+            <td
+              style={{
+                ...td,
+                textAlign: "center",
+                font: `600 20px/1 ${fonts.display}`,
+                color: part.fit === "beyond" ? colors.brick : colors.ink,
+              }}
+            >
+              {Math.round(part.score)}
+            </td>
+            <td style={{ ...td, font: `400 14px/18px ${fonts.text}`, color: toneOf[part.fit], paddingLeft: 4 }}>
+              {setSigns(part.words)}
+            </td>
+          </tr>
+        ))}
+      </tbody>
+    </table>
+  );
+}
+
+const toneOf = { comfort: colors.inkSoft, reach: colors.honeyText, beyond: colors.brick } as const;
+const table: CSSProperties = {
+  width: "100%",
+  tableLayout: "fixed",
+  borderCollapse: "separate",
+  borderSpacing: 0,
+  font: `400 14px/18px ${fonts.text}`,
+  color: colors.ink,
+};
+const th: CSSProperties = {
+  borderBottom: `1.5px solid ${colors.ink}`,
+  font: `500 12px/16px ${fonts.text}`,
+  color: colors.inkSoft,
+  textAlign: "left",
+  verticalAlign: "bottom",
+  padding: "0 0 8px",
+};
+const td: CSSProperties = {
+  padding: 0,
+  borderBottom: `1px solid ${colors.line}`,
+  boxSizing: "border-box",
+  height: rowHeight + 1,
+  verticalAlign: "middle",
+};

@@ -1,11 +1,17 @@
 import { type Mode, scaleSteps } from "../music/keyName";
 import { glyphs, pitchClass } from "../music/pitch";
-import type { TakeReport } from "../voice/takeReport";
 import { findKey, rankKeys } from "./findKey";
 import type { MelodyNote } from "./melody";
 
-/** What a listened-to take must tell for a tune to be read from it. */
-export type SungTake = Pick<TakeReport, "notes" | "range" | "tuningCents">;
+/** What a listened-to take must tell for a tune to be read from it. Pitches in MIDI numbers with fractions. */
+export interface SungTake {
+  /** in order, times in seconds; one that is not clear may be a scoop or a crack */
+  notes: readonly { start: number; end: number; midi: number; clear: boolean }[];
+  /** null where nothing was heard */
+  range: { lowMidi: number; highMidi: number } | null;
+  /** how far the singer's own tuning lies from 440 Hz for A4 */
+  tuningCents: number;
+}
 
 /** The beats a minute at which a tune is written down when its song has no tempo: a second is a quarter note. */
 export const UNTIMED_TEMPO = 60;

@@ -2,10 +2,10 @@ import type { ExportedSong } from "@/shared/contract/songExport";
 import { abcTunes } from "@/shared/songs/abcBook";
 import { parseChart } from "@/shared/songs/chart";
 import { findKey } from "@/shared/songs/findKey";
+import { lyricLines } from "@/shared/songs/lyricLines";
 import { readSongText, titleOfFile } from "@/shared/songs/songExport";
 import { decodeText } from "@/shared/songs/textBytes";
 import { readSongFile } from "../files/readSongFile";
-import { melodyWords } from "./melodyWords";
 import { readSongsFile } from "./songsFile";
 
 /** A song that a file holds, or why it gives none. `title` is null where only the file has a name. */
@@ -58,13 +58,19 @@ function readText(name: string, text: string, now: Date): Incoming {
 
 /** A book of tunes gives as many songs. */
 async function readTunes(name: string, text: string, signal: AbortSignal, now: Date): Promise<Incoming[]> {
-  const tunes = abcTunes(text, mostTunes);
+  const tunes = abcTunes(text, mostTunes + 1);
   if (tunes.length === 0) return [{ ok: false, title: null, reason: "There is no tune in this file." }];
   const out: Incoming[] = [];
-  for (const [index, tune] of tunes.entries()) {
+  for (const [index, tune] of tunes.slice(0, mostTunes).entries()) {
     const part = tunes.length === 1 ? name : `${name.replace(/\.abc$/i, "")} ${index + 1}.abc`;
     out.push(await readTune(new File([[...tune.header, ...tune.body, ""].join("\n")], part), signal, now));
   }
+  if (tunes.length > mostTunes)
+    out.push({
+      ok: false,
+      title: null,
+      reason: `This file has more than ${mostTunes} tunes. The first ${mostTunes} were read.`,
+    });
   return out;
 }
 
@@ -81,7 +87,7 @@ async function readTune(file: File, signal: AbortSignal, now: Date): Promise<Inc
     song: {
       ...fresh(now),
       title: named === "" ? title : [...named].slice(0, 200).join(""),
-      chart: melodyWords(voice.melody.notes),
+      chart: lyricLines(voice.lyrics ?? []).join("\n"),
       writtenKey: voice.stated ?? { tonic: home, mode: voice.melody.mode ?? "major" },
       tune: { kind: "melody", notes: [...voice.melody.notes], home },
       beatsPerBar: read.beatsPerBar,

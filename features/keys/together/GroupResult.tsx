@@ -1,3 +1,4 @@
+import type { Href } from "expo-router";
 import { useState } from "react";
 import { View } from "react-native";
 import { Heading } from "@/features/ui/Heading";
@@ -5,6 +6,7 @@ import { LiveText } from "@/features/ui/LiveText";
 import { Notice } from "@/features/ui/Notice";
 import { Select } from "@/features/ui/Select";
 import { Text } from "@/features/ui/Text";
+import { TextLink } from "@/features/ui/TextLink";
 import { FairestKey } from "./FairestKey";
 import { sortedKeys, type GroupKey, type GroupOrder, type JudgedSinger } from "./groupKeys";
 import { noKeyForAll } from "./groupWords";
@@ -18,11 +20,13 @@ export interface GroupResultProps {
   singers: readonly JudgedSinger[];
   coarse: boolean;
   decided: boolean;
+  /** to the ways to play the picked key */
+  waysHref: Href;
   onPick: (key: GroupKey) => void;
 }
 
 /** The fairest key in words, and every singer in every key as a picture with numbers. */
-export function GroupResult({ keys, picked, singers, coarse, decided, onPick }: GroupResultProps) {
+export function GroupResult({ keys, picked, singers, coarse, decided, waysHref, onPick }: GroupResultProps) {
   const [order, setOrder] = useState<GroupOrder>("fairest");
   const orders = [
     { value: "fairest", label: "fairest first" },
@@ -36,9 +40,12 @@ export function GroupResult({ keys, picked, singers, coarse, decided, onPick }: 
       <Heading level={2}>One key for all</Heading>
       <FairestKey picked={picked} fairest={keys[0]!} />
       {decided && (
-        <LiveText variant="small" tone="lagoon" testID="shared-key-kept">
-          {`${picked.sign} is kept as the key of this song, whoever sings it.`}
-        </LiveText>
+        <View style={{ flexDirection: "row", flexWrap: "wrap", columnGap: 8, alignItems: "baseline" }}>
+          <LiveText variant="small" tone="lagoon" testID="shared-key-kept">
+            {`${picked.sign} is kept as the key of this song, whoever sings it.`}
+          </LiveText>
+          <TextLink href={waysHref}>Ways to play it</TextLink>
+        </View>
       )}
       {noKey !== null && (
         <Notice kind="caution" testID="no-key-for-all">
@@ -62,7 +69,7 @@ export function GroupResult({ keys, picked, singers, coarse, decided, onPick }: 
         />
         {", scores of 100."}
       </Text>
-      <HeatTable keys={sortedKeys(keys, known)} singers={singers} selected={picked} onSelect={onPick} />
+      <HeatTable key={known} keys={sortedKeys(keys, known)} singers={singers} selected={picked} onSelect={onPick} />
       <HeatLegend />
     </View>
   );

@@ -1,9 +1,8 @@
 import type { CSSProperties } from "react";
-import { useWindowDimensions } from "react-native";
 import { KeySpan } from "@/features/span/KeySpan";
 import { keySpanWidth, keySpanX } from "@/features/span/keySpanGeometry";
 import { setSigns } from "@/features/ui/textSigns";
-import { colors, fonts, sizes } from "@/features/ui/theme";
+import { colors, fonts } from "@/features/ui/theme";
 import { unseen } from "@/features/ui/unseen";
 import { spellingIn } from "../keyRows";
 import type { GroupKey } from "./groupKeys";
@@ -11,13 +10,18 @@ import { octaveNote } from "./groupWords";
 import { groupScale } from "./groupScale";
 import { SpanScale } from "./SpanScale";
 
-const widths = { name: 190, score: 72, words: 320 } as const;
+const widths = { name: 150, score: 64, words: 230 } as const;
 const rowHeight = 51;
 
+export interface SpanTableProps {
+  picked: GroupKey;
+  /** px that the table may take */
+  room: number;
+}
+
 /** Wide: each singer as a row, the tune over its own band, all on one scale. */
-export function SpanTable({ picked }: { picked: GroupKey }) {
+export function SpanTable({ picked, room }: SpanTableProps) {
   const scale = groupScale(picked);
-  const room = Math.min(sizes.content, useWindowDimensions().width - sizes.rail - 2 * sizes.gutterWide);
   const step = Math.min(14.4, (room - widths.name - widths.score - widths.words) / keySpanWidth(scale, 1));
   const width = keySpanWidth(scale, step);
   return (

@@ -1,5 +1,5 @@
 import { useMemo, useState } from "react";
-import { View } from "react-native";
+import { useWindowDimensions, View } from "react-native";
 import { Button } from "@/features/ui/Button";
 import { EmptyState } from "@/features/ui/EmptyState";
 import { Heading } from "@/features/ui/Heading";
@@ -8,6 +8,7 @@ import { LiveText } from "@/features/ui/LiveText";
 import { Notice } from "@/features/ui/Notice";
 import { Screen } from "@/features/ui/Screen";
 import { Skeleton } from "@/features/ui/Skeleton";
+import { sizes } from "@/features/ui/theme";
 import { useLayout } from "@/features/ui/useLayout";
 import type { Song } from "@/shared/contract/song";
 import { voiceTypes } from "@/shared/keys/voiceTypes";
@@ -34,6 +35,9 @@ export interface TogetherScreenProps {
   readNotes: ReadNotes;
 }
 
+/** From this width on the singers stand beside the result. */
+const columns = { from: 1240, singers: 340, gap: 40 } as const;
+
 /** One key for several singers: who sings, the fairest key, every singer in every key, and the tune in each voice. */
 export function TogetherScreen({ song, own, pending, error, onRetry, readNotes }: TogetherScreenProps) {
   const layout = useLayout();
@@ -49,7 +53,9 @@ export function TogetherScreen({ song, own, pending, error, onRetry, readNotes }
     keep(next);
     setSaid(words);
   };
-  const wide = layout === "wide";
+  const width = useWindowDimensions().width;
+  const room = Math.min(sizes.content, width - sizes.rail - 2 * sizes.gutterWide);
+  const beside = width >= columns.from;
   const take = picked && (
     <Button
       small={layout !== "phone"}
@@ -92,8 +98,8 @@ export function TogetherScreen({ song, own, pending, error, onRetry, readNotes }
               {`${group.error.message} The singers are still here; try again.`}
             </Notice>
           )}
-          <View style={wide ? { flexDirection: "row", gap: 40, alignItems: "flex-start" } : { gap: 28 }}>
-            <View style={wide ? { width: 340 } : null}>
+          <View style={beside ? { flexDirection: "row", gap: columns.gap, alignItems: "flex-start" } : { gap: 28 }}>
+            <View style={beside ? { width: columns.singers } : null}>
               <SingersPane
                 singers={singers}
                 known={known}
@@ -104,28 +110,36 @@ export function TogetherScreen({ song, own, pending, error, onRetry, readNotes }
                 onChange={change}
               />
             </View>
-            <View style={wide ? { flexGrow: 1, flexShrink: 1, flexBasis: 0, minWidth: 0 } : null}>
+            <View style={[{ gap: 28 }, beside ? { flexGrow: 1, flexShrink: 1, flexBasis: 0, minWidth: 0 } : null]}>
               {keys && picked ? (
-                <GroupResult
-                  keys={keys}
-                  picked={picked}
-                  singers={group.singers}
-                  coarse={group.coarse}
-                  decided={decided}
-                  onPick={(key) => setTonic(key.key.tonic)}
-                />
+                <>
+                  <GroupResult
+                    keys={keys}
+                    picked={picked}
+                    singers={group.singers}
+                    coarse={group.coarse}
+                    decided={decided}
+                    waysHref={{
+                      pathname: "/songs/[id]/ways",
+                      params: { id: song.id, key: picked.key.tonic, shift: String(picked.shift) },
+                    }}
+                    onPick={(key) => setTonic(key.key.tonic)}
+                  />
+                  <View style={{ gap: 12 }}>
+                    <Heading level={2}>{`Each voice in ${picked.sign}`}</Heading>
+                    {layout === "wide" ? (
+                      <SpanTable picked={picked} room={room - (beside ? columns.singers + columns.gap : 0)} />
+                    ) : (
+                      <SpanList picked={picked} />
+                    )}
+                    <KeyLegend />
+                  </View>
+                </>
               ) : (
                 <NeedsSingers id={song.id} judged={group.singers.length} />
               )}
             </View>
           </View>
-          {picked && (
-            <View style={{ gap: 12 }}>
-              <Heading level={2}>{`Each voice in ${picked.sign}`}</Heading>
-              {wide ? <SpanTable picked={picked} /> : <SpanList picked={picked} />}
-              <KeyLegend />
-            </View>
-          )}
         </View>
       )}
     </Screen>

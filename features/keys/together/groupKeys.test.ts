@@ -42,10 +42,11 @@ test("who sings in another octave than most is said by name", () => {
   );
 });
 
-test("the octave that the others are told from is the nearest to the chart; of equals the one that more share", () => {
+test("the octave that the others are told from has nobody far off, and lies near the chart", () => {
   expect(leadShift([-12, 0, -12])).toBe(0);
   expect(leadShift([-12, -12])).toBe(-12);
-  expect(leadShift([6, -6, -6])).toBe(-6);
+  expect(leadShift([5, -7, -19, -19])).toBe(-7);
+  expect(leadShift([-14, -2])).toBe(-2);
   expect(leadShift([6, -6])).toBe(6);
   expect(leadShift([])).toBe(0);
 });

@@ -14,10 +14,11 @@ export function semitoneWords(count: number): string {
   return `${count} ${count === 1 ? "semitone" : "semitones"}`;
 }
 
-/** The octave that the others are told from: of the moves in use the one nearest to the chart; of equals the one that more share. */
+/** The octave that the others are told from: of the moves in use the one with nobody far off, then the one nearest to the chart. */
 export function leadShift(shifts: readonly number[]): number {
-  const count = (shift: number) => shifts.filter((other) => other === shift).length;
-  return [...shifts].sort((a, b) => Math.abs(a) - Math.abs(b) || count(b) - count(a) || b - a)[0] ?? 0;
+  const furthest = (from: number) => Math.max(...shifts.map((shift) => Math.abs(shift - from)));
+  const rank = (a: number, b: number) => furthest(a) - furthest(b) || Math.abs(a) - Math.abs(b) || b - a;
+  return [...shifts].sort(rank)[0] ?? 0;
 }
 
 export function octaveOff(shift: number, lead: number): number {

@@ -86,6 +86,12 @@ const commands = {
     const args = [...typescript, path.join(root, "__tests__", "bench", "keyBench.ts"), ...process.argv.slice(3)];
     await together([{ args, env: {} }]);
   },
+
+  async "bench:keys"() {
+    await ensurePackages({ root, say });
+    const args = [...typescript, path.join(root, "__tests__", "bench", "keysBench.ts"), ...process.argv.slice(3)];
+    await together([{ args, env: {} }]);
+  },
 };
 
 /** Runs a program that plays with the whole product in a browser. */

@@ -1,9 +1,9 @@
 import { abcTunes } from "./abcBook";
 import { abcPartOrder } from "./abcSigns";
-import { type AbcPart, type AbcTune, readAbcTune } from "./abcTune";
+import { type AbcPart, type AbcTune, mostVoices, readAbcTune } from "./abcTune";
 import { type AbcBarText, AbcTooLarge } from "./abcBars";
 import type { MelodyNote } from "./melody";
-import type { MelodySyllable, WrittenFile, WrittenVoice } from "./melodyVoice";
+import { type MelodySyllable, type WrittenFile, type WrittenVoice, laterChanges } from "./melodyVoice";
 import { playingOrder } from "./repeats";
 
 const most = { characters: 500_000, tunes: 200, notes: 100_000 };
@@ -27,7 +27,8 @@ export function readAbc(text: string): WrittenFile {
   if (!/^\s*K:/m.test(text)) return { ok: false, reason: "This is no ABC tune: its K: line is missing." };
   if (text.length > most.characters) return tooLarge;
   try {
-    const tunes = abcTunes(text, most.tunes).map(readAbcTune);
+    const book = abcTunes(text, most.tunes + 1);
+    const tunes = book.slice(0, most.tunes).map(readAbcTune);
     const voices: WrittenVoice[] = [];
     let notes = 0;
     for (const tune of tunes) {
@@ -45,6 +46,15 @@ export function readAbc(text: string): WrittenFile {
       voices,
       tempo: first?.tempo ?? null,
       beatsPerBar: first?.beatsPerBar ?? null,
+      cautions: [
+        ...(book.length > most.tunes
+          ? [`It has more than ${most.tunes} tunes; the first ${most.tunes} were read.`]
+          : []),
+        ...(tunes.some((tune) => tune.unread.size > 0)
+          ? [`A tune has more than ${mostVoices} voices; the others were not read.`]
+          : []),
+        ...laterChanges(first?.changes ?? { tempo: false, metre: false }),
+      ],
     };
   } catch (error) {
     if (error instanceof AbcTooLarge) return tooLarge;

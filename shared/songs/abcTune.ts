@@ -22,9 +22,14 @@ export interface AbcTune {
   /** quarter notes a minute, or null */
   tempo: number | null;
   beatsPerBar: number | null;
+  /** whether the speed or the metre changes after the beginning */
+  changes: { tempo: boolean; metre: boolean };
+  /** ids of voices beyond the first 64, which are not read */
+  unread: Set<string>;
 }
 
-const mostVoices = 64;
+/** Voices of one tune that are read. */
+export const mostVoices = 64;
 const field = /^\s*([A-Za-z+]):(?![|:])(.*)$/;
 
 /**
@@ -36,7 +41,16 @@ const field = /^\s*([A-Za-z+]):(?![|:])(.*)$/;
  * @see ABC music standard 2.1
  */
 export function readAbcTune(text: AbcTuneText): AbcTune {
-  const tune: AbcTune = { title: null, key: null, parts: [], order: null, tempo: null, beatsPerBar: null };
+  const tune: AbcTune = {
+    title: null,
+    key: null,
+    parts: [],
+    order: null,
+    tempo: null,
+    beatsPerBar: null,
+    changes: { tempo: false, metre: false },
+    unread: new Set(),
+  };
   const about = new Map<string, string>();
   let setting: AbcSetting = {
     signature: {},
@@ -90,7 +104,7 @@ export function readAbcTune(text: AbcTuneText): AbcTune {
     if (!known && voices.size < mostVoices) {
       voices.set(id, entered);
       tune.parts.push(entered);
-    }
+    } else if (!known) tune.unread.add(id);
     return entered;
   };
   const voices = new Map<string, AbcPart>();
@@ -105,8 +119,11 @@ export function readAbcTune(text: AbcTuneText): AbcTune {
     }
     here ??= enter("1");
     const { voice } = here;
-    if (letter === "M") voice.setting = { ...voice.setting, ...metreOf(said) };
-    else if (letter === "L") voice.setting = { ...voice.setting, unit: unitOf(said) ?? voice.setting.unit };
+    if (letter === "M") {
+      voice.setting = { ...voice.setting, ...metreOf(said) };
+      tune.beatsPerBar ??= beatsOf(said);
+      tune.changes.metre ||= beatsOf(said) !== tune.beatsPerBar;
+    } else if (letter === "L") voice.setting = { ...voice.setting, unit: unitOf(said) ?? voice.setting.unit };
     else if (letter === "K") {
       const read = readAbcKey(said);
       const clef = { ...voice.setting.clef, ...unnamed(read.clef) };
@@ -114,7 +131,11 @@ export function readAbcTune(text: AbcTuneText): AbcTune {
     } else if (letter === "I") {
       const clef = unnamed(readAbcClef(said));
       voice.setting = { ...voice.setting, clef: { ...voice.setting.clef, ...clef } };
-    } else if (letter === "Q") tune.tempo ??= tempoOf(said, voice.setting.unit);
+    } else if (letter === "Q") {
+      const speed = tempoOf(said, voice.setting.unit);
+      tune.tempo ??= speed;
+      tune.changes.tempo ||= speed !== null && speed !== tune.tempo;
+    }
   };
   const words = new Map<AbcVoice, { verse: number; cursor: WordCursor; open: boolean }>();
   const lay = (said: string, more: boolean) => {

@@ -20,6 +20,8 @@ export type MelodyFile =
       tempo: number | null;
       /** beats of a bar at the beginning as the metre counts them (3 in 3/4, 6 in 6/8); null where none is stated */
       beatsPerBar: number | null;
+      /** sentences that say what of the file is not in what was read: voices, tunes, later speeds and metres */
+      cautions: string[];
     }
   | { ok: false; reason: string };
 
@@ -46,7 +48,8 @@ export function readMelodyFile(name: string, bytes: Uint8Array): MelodyFile {
   const written = readWritten(name, bytes);
   if (!written.ok) return written;
   const filled = written.voices.filter((voice) => voice.notes.length > 0);
-  const kept = filled.filter((voice) => voice.notes.length <= mostNotes).slice(0, mostVoices);
+  const short = filled.filter((voice) => voice.notes.length <= mostNotes);
+  const kept = short.slice(0, mostVoices);
   if (kept.length === 0) {
     const reason =
       filled.length === 0 ? "There are no notes in this file." : "No voice of this file has fewer than 10,000 notes.";
@@ -64,7 +67,16 @@ export function readMelodyFile(name: string, bytes: Uint8Array): MelodyFile {
       written.beatsPerBar !== null && written.beatsPerBar >= 1 && written.beatsPerBar <= 16
         ? written.beatsPerBar
         : null,
+    cautions: [
+      ...leftOut(short.length - kept.length, `only the first ${mostVoices} are read`),
+      ...leftOut(filled.length - short.length, `more than 10,000 notes are no melody`),
+      ...written.cautions,
+    ],
   };
+}
+
+function leftOut(count: number, why: string): string[] {
+  return count === 0 ? [] : [`${count === 1 ? "One voice is" : `${count} voices are`} left out: ${why}.`];
 }
 
 function readWritten(name: string, bytes: Uint8Array): WrittenFile {

@@ -47,8 +47,22 @@ export type WrittenFile =
       tempo: number | null;
       /** upper figure of the first metre, or null */
       beatsPerBar: number | null;
+      /** sentences that say what of the file is not in what was read */
+      cautions: string[];
     }
   | { ok: false; reason: string };
+
+/**
+ * Says which of the speed and the metre of a file are not the only ones.
+ *
+ * @param changes whether each changes after the beginning
+ * @returns a sentence for each that does
+ * @example laterChanges({ tempo: false, metre: true }) // => ["Its metre changes later; the first one is taken."]
+ */
+export function laterChanges(changes: { tempo: boolean; metre: boolean }): string[] {
+  const said = (what: string) => `Its ${what} changes later; the first one is taken.`;
+  return [...(changes.tempo ? [said("speed")] : []), ...(changes.metre ? [said("metre")] : [])];
+}
 
 /**
  * Makes a single line of notes that may overlap: of notes that start together the highest, and a note ends where

@@ -1,9 +1,11 @@
 import { type KeyName, keyOfFifths } from "../music/keyName";
-import type { WrittenFile, WrittenVoice } from "./melodyVoice";
+import { type WrittenFile, type WrittenVoice, laterChanges } from "./melodyVoice";
 import { readMidiTracks } from "./midiTracks";
 import { giveMidiWords, midiWords } from "./midiWords";
 
 const drumChannel = 9;
+/** The part of a speed by which another still is the same: programs round it. */
+const slack = 0.01;
 
 /**
  * Reads a Standard MIDI File of any format; each track, or each channel where a track holds several, becomes a voice.
@@ -43,12 +45,17 @@ export function readMidi(bytes: Uint8Array): WrittenFile {
   // The first track of a file with several is the conductor's: its name is that of the piece.
   const first = file.tracks[0]!;
   const named = first.channels.size === 0 || file.tracks.length === 1 ? first.name : "";
+  const [tempo, metre] = [file.tempos[0]?.quartersAMinute ?? null, file.metres[0]?.beats ?? null];
   return {
     ok: true,
     title: (words.title ?? named) || null,
     voices: voices.map(({ track: _, ...voice }) => voice),
-    tempo: file.tempos[0]?.quartersAMinute ?? null,
-    beatsPerBar: file.metres[0]?.beats ?? null,
+    tempo,
+    beatsPerBar: metre,
+    cautions: laterChanges({
+      tempo: file.tempos.some(({ quartersAMinute }) => Math.abs(quartersAMinute - tempo!) > slack * tempo!),
+      metre: file.metres.some(({ beats }) => beats !== metre),
+    }),
   };
 }
 

@@ -1,5 +1,5 @@
 import type { MelodyNote } from "./melody";
-import type { MelodySyllable, WrittenFile, WrittenVoice } from "./melodyVoice";
+import { type MelodySyllable, type WrittenFile, type WrittenVoice, laterChanges } from "./melodyVoice";
 import { placeCodas } from "./musicXmlJumps";
 import { type PartText, type ScoreNote, readPart } from "./musicXmlPart";
 import { type MeasureSigns, playingOrder } from "./repeats";
@@ -57,6 +57,10 @@ export function readMusicXml(source: string): WrittenFile {
     voices: parts.flatMap((part) => unroll(part, order, lengths, signs)),
     tempo: parts.find((part) => part.tempo !== null)?.tempo ?? null,
     beatsPerBar: parts.find((part) => part.beats !== null)?.beats ?? null,
+    cautions: laterChanges({
+      tempo: parts.some((part) => part.changes.tempo),
+      metre: parts.some((part) => part.changes.metre),
+    }),
   };
 }
 

@@ -26,6 +26,8 @@ export interface PartText {
   tempo: number | null;
   /** upper figure of the first metre, or null */
   beats: number | null;
+  /** whether a later mark of speed or metre says something else */
+  changes: { tempo: boolean; metre: boolean };
 }
 
 const letters: Record<string, number> = { C: 0, D: 2, E: 4, F: 5, G: 7, A: 9, B: 11 };
@@ -51,6 +53,7 @@ export function readPart(written: readonly XmlElement[]): PartText {
   let percussion = false;
   let tempo: number | null = null;
   let beats: number | null = null;
+  const changes = { tempo: false, metre: false };
   const measures = written.map((measure): Measure => {
     const notes: ScoreNote[] = [];
     const signs: ScoreSigns = {};
@@ -66,7 +69,9 @@ export function readPart(written: readonly XmlElement[]): PartText {
             (childNumber(transpose, "chromatic") ?? 0) + 12 * (childNumber(transpose, "octave-change") ?? 0);
         signature ??= signatureOf(child(element, "key"), transposition);
         key ??= keyOf(child(element, "key"), signature);
-        beats ??= beatsOf(child(element, "time"));
+        const stated = beatsOf(child(element, "time"));
+        beats ??= stated;
+        changes.metre ||= stated !== null && stated !== beats;
         if (childrenOf(element, "clef").some((clef) => child(clef, "sign")?.text.trim() === "percussion"))
           percussion = true;
       } else if (element.name === "note") {
@@ -84,13 +89,15 @@ export function readPart(written: readonly XmlElement[]): PartText {
       else if (element.name === "barline") readBarline(element, signs);
       else if (element.name === "sound" || element.name === "direction") {
         readDirection(element, signs);
-        tempo ??= tempoOf(element);
+        const speed = tempoOf(element);
+        tempo ??= speed;
+        changes.tempo ||= speed !== null && speed !== tempo;
       }
       length = Math.max(length, now);
     }
     return { notes, length, signs };
   });
-  return { measures, key, signature, percussion, tempo, beats };
+  return { measures, key, signature, percussion, tempo, beats, changes };
 }
 
 function noteSigns(element: XmlElement): Pick<ScoreNote, "voice" | "tieStop" | "verses"> {

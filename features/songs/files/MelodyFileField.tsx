@@ -118,6 +118,11 @@ export function MelodyFileField({ draft, error, onChange }: MelodyFileFieldProps
           </Text>
         </View>
       )}
+      {file && melody && file.cautions.length > 0 && (
+        <Text variant="small" tone="soft" testID="melody-cautions">
+          {file.cautions.join(" ")}
+        </Text>
+      )}
       {file && file.voices.length > 1 && (
         <VoiceChoice
           voices={file.voices}

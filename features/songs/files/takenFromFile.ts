@@ -14,7 +14,7 @@ export function takenFromFile(
   }
   if (file.tempo !== null && draft.tempo.trim() === "") {
     change.tempo = String(Math.round(file.tempo));
-    words.push(`${change.tempo} beats a minute`);
+    words.push(`${change.tempo} quarter notes a minute`);
   }
   if (file.beatsPerBar !== null && ["", emptyDraft.beatsPerBar].includes(draft.beatsPerBar.trim())) {
     change.beatsPerBar = String(file.beatsPerBar);

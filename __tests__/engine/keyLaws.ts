@@ -2,6 +2,7 @@ import assert from "node:assert/strict";
 import fc from "fast-check";
 import { keyParts, voiceEdges } from "@/shared/keys/keyParts";
 import type { KeyParts, KeyScore, SingingVoice } from "@/shared/keys/keyScore";
+import { nearestSemitone } from "@/shared/keys/nearestSemitone";
 import { scoreKeys } from "@/shared/keys/scoreKeys";
 import { tunePitches } from "@/shared/keys/tunePicture";
 import { tonicPitchClass } from "@/shared/music/keyName";
@@ -65,7 +66,7 @@ export const keyLaws: readonly KeyLaw[] = [
     "3: a key with a note beyond the range ranks under every key without, and says which notes and how long",
     fc.property(anyTune, anyVoice, (song, singer) => {
       const keys = scoreKeys(song, singer);
-      const [low, high] = [Math.round(singer.range.lowMidi), Math.round(singer.range.highMidi)];
+      const [low, high] = [nearestSemitone(singer.range.lowMidi), nearestSemitone(singer.range.highMidi)];
       const whole = song.notes.reduce((sum, { duration }) => sum + duration, 0);
       for (const key of keys) {
         assert.equal(key.beyond, key.lowMidi < low || key.highMidi > high);

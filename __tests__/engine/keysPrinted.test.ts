@@ -93,7 +93,7 @@ describe("the worked tessituragram", () => {
       [67, 12],
       [69, 4],
     ]);
-    const figures = tessitura(notes);
+    const figures = tessitura(notes)!;
     expect(figures.mean).toBeCloseTo(64.3333, 4);
     expect(figures.sd).toBeCloseTo(2.7789, 4);
     expect([figures.q1, figures.median, figures.q3]).toEqual([62, 64, 67]);

@@ -1,5 +1,6 @@
 import assert from "node:assert/strict";
 import fc from "fast-check";
+import { nearestSemitone } from "@/shared/keys/nearestSemitone";
 import { scoreKeys } from "@/shared/keys/scoreKeys";
 import { scoreSharedKeys, type SharedKey, type Singer } from "@/shared/keys/sharedKey";
 import { anyTune, anyVoice, byTonic, type KeyLaw, law, movedTune, movedVoice } from "./keyCases";
@@ -89,8 +90,8 @@ export const sharedKeyLaws: readonly KeyLaw[] = [
       for (const key of scoreSharedKeys(song, singers))
         key.singers.forEach((singer, k) => {
           const { comfort } = singers[k]!.voice;
-          const over = singer.key.highMidi - Math.round(comfort.highMidi);
-          const under = Math.round(comfort.lowMidi) - singer.key.lowMidi;
+          const over = singer.key.highMidi - nearestSemitone(comfort.highMidi);
+          const under = nearestSemitone(comfort.lowMidi) - singer.key.lowMidi;
           assert.deepEqual(singer.squeezed, { above: Math.max(0, over), below: Math.max(0, under) });
           assert.equal(singer.beyond, singer.outOfRange.above + singer.outOfRange.below > 0);
           assert.equal((singer.shift - key.singers[0]!.shift) % 12 === 0, true);
@@ -102,7 +103,7 @@ export const sharedKeyLaws: readonly KeyLaw[] = [
 /** Scores from the worst-off up; singers whose voices have the same whole semitones once. */
 function ladderOf({ singers }: SharedKey, given: readonly Singer[]): number[] {
   const edges = ({ voice: { range, comfort } }: Singer) =>
-    [range.lowMidi, comfort.lowMidi, comfort.highMidi, range.highMidi].map(Math.round).join();
+    [range.lowMidi, comfort.lowMidi, comfort.highMidi, range.highMidi].map(nearestSemitone).join();
   const scores = new Map(singers.map(({ score }, k) => [edges(given[k]!), score]));
   return [...scores.values()].sort((a, b) => a - b);
 }

@@ -1,4 +1,5 @@
 import type { KeyParts, SingingVoice } from "./keyScore";
+import { nearestSemitone } from "./nearestSemitone";
 import type { TunePitch } from "./tunePicture";
 
 /** Most points of each part; together 100. */
@@ -40,16 +41,16 @@ export function voiceEdges(voice: SingingVoice): VoiceEdges {
   const edges = [range.lowMidi, comfort.lowMidi, comfort.highMidi, range.highMidi];
   const inOrder = edges.every((edge, k) => Number.isFinite(edge) && (k === 0 || edges[k - 1]! <= edge));
   if (!inOrder) throw new RangeError("a voice needs a comfort band inside its range, both from low to high");
-  const rangeLow = Math.round(range.lowMidi);
-  const rangeHigh = Math.round(range.highMidi);
+  const rangeLow = nearestSemitone(range.lowMidi);
+  const rangeHigh = nearestSemitone(range.highMidi);
   const heard = voice.heard ?? range;
   return {
     rangeLow,
-    comfortLow: Math.round(comfort.lowMidi),
-    comfortHigh: Math.round(comfort.highMidi),
+    comfortLow: nearestSemitone(comfort.lowMidi),
+    comfortHigh: nearestSemitone(comfort.highMidi),
     rangeHigh,
-    heardLow: Math.max(rangeLow, Math.round(heard.lowMidi)),
-    heardHigh: Math.min(rangeHigh, Math.round(heard.highMidi)),
+    heardLow: Math.max(rangeLow, nearestSemitone(heard.lowMidi)),
+    heardHigh: Math.min(rangeHigh, nearestSemitone(heard.highMidi)),
   };
 }
 

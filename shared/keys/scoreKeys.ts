@@ -4,6 +4,7 @@ import { keyParts, voiceEdges, type VoiceEdges } from "./keyParts";
 import { keyReason } from "./keyReason";
 import { compareTies, nearestMove } from "./keyTies";
 import type { KeyMark, KeyScore, SingingVoice, Tune } from "./keyScore";
+import { nearestSemitone } from "./nearestSemitone";
 import { tunePitches, type TunePitch } from "./tunePicture";
 
 /** How one sung pitch felt to the singer afterwards. */
@@ -137,7 +138,7 @@ function zoneOf(midi: number, edges: VoiceEdges): KeyMark["zone"] {
 /** Pulls the comfort band in, away from pitches that felt hard; narrowing a band never raises a score. */
 function narrowed(edges: VoiceEdges, evidence: readonly EffortEvidence[]): VoiceEdges {
   const middle = (edges.comfortLow + edges.comfortHigh) / 2;
-  const hard = evidence.filter(({ effort }) => effort >= hardFrom).map(({ midi }) => Math.round(midi));
+  const hard = evidence.filter(({ effort }) => effort >= hardFrom).map(({ midi }) => nearestSemitone(midi));
   const tops = hard.filter((midi) => midi > middle).map((midi) => Math.max(midi - 1, Math.floor(middle)));
   const bottoms = hard.filter((midi) => midi <= middle).map((midi) => Math.min(midi + 1, Math.ceil(middle)));
   const comfortHigh = Math.min(edges.comfortHigh, ...tops);

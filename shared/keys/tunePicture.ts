@@ -1,4 +1,5 @@
 import type { Tune } from "./keyScore";
+import { nearestSemitone } from "./nearestSemitone";
 
 /** One pitch of a tune: how much of the sung time it takes and how its notes are held. */
 export interface TunePitch {
@@ -44,7 +45,7 @@ export function tunePitches(tune: Tune): TunePitch[] {
   for (const note of tune.notes) {
     if (!(note.duration > 0) || !Number.isFinite(note.duration) || !(note.midi >= 0 && note.midi <= 127))
       throw new RangeError("every note needs a MIDI pitch, 0 to 127, and a length above 0");
-    const midi = Math.round(note.midi);
+    const midi = nearestSemitone(note.midi);
     const others = lengths.get(midi);
     if (others) others.push(note.duration);
     else lengths.set(midi, [note.duration]);
@@ -65,8 +66,8 @@ export function tunePitches(tune: Tune): TunePitch[] {
 function spanPitches(lowMidi: number, highMidi: number): TunePitch[] {
   if (!(lowMidi >= 0 && lowMidi <= highMidi && highMidi <= 127))
     throw new RangeError("a span runs from low to high, MIDI 0 to 127");
-  const low = Math.round(lowMidi);
-  const high = Math.round(highMidi);
+  const low = nearestSemitone(lowMidi);
+  const high = nearestSemitone(highMidi);
   const weights = Array.from({ length: high - low + 1 }, (_, k) => 1 + Math.min(k, high - low - k));
   const total = weights.reduce((sum, weight) => sum + weight, 0);
   return weights.map((weight, k) => {

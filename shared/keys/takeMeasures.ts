@@ -1,26 +1,36 @@
-/** How a phrase, or a whole take, was sung. Every figure is null where too little was sung to tell. */
+/** A note that was not reached as wanted: a high one sung lower, or a low one sung higher. */
+export interface Shortfall {
+  /** as wanted, in the singer's octave */
+  midi: number;
+  /** how far it was missed; null where it was not sung at all while the rest of its phrase was */
+  semitones: number | null;
+  /** on which side of the tune it lies */
+  side: "above" | "below";
+}
+
+/** How a phrase, or a whole take, was sung. A figure is null where too little was sung to tell. */
 export interface Measures {
   /** share of the wanted time in which something was sung for it, 0 to 1 */
   sungShare: number;
   /** duration-weighted mean distance from the tune in cents, the singer's own tuning taken out; octaves do not count */
   offCents: number | null;
-  /** share of the sung time within 50 cents of the tune, 0 to 1 */
+  /** share of the sung time on notes within 50 cents of the tune, 0 to 1 */
   inTune: number | null;
-  /** the note that was fallen short of the most, or not reached at all; null where all were reached */
-  fellShort: { midi: number; semitones: number; side: "above" | "below" } | null;
-  /** median unsteadiness of its held notes in cents against the singer's own median: 1 is as ever, 2 twice as unsteady */
+  /** the note that was missed by most; null where every note was reached */
+  fellShort: Shortfall | null;
+  /** unsteadiness of its held notes against the singer's own median: 1 is as ever, 2 twice as unsteady */
   unsteady: number | null;
-  /** the highest low note that was left out or sung much more softly than the rest; null where the low notes carried */
+  /** the highest low note that was left out, or sung much more softly than the rest; null where the low notes carried */
   ranOutOfLow: { midi: number; why: "left out" | "weak" } | null;
 }
 
 /** A phrase of the song as it was sung. */
 export interface PhraseMeasures extends Measures {
-  /** index of the phrase in the plan */
+  /** index of the phrase among those wanted */
   phrase: number;
   /** its words; null where it has none */
   label: string | null;
-  /** lowest and highest note of the tune in it, as wanted */
+  /** lowest and highest wanted note in it, in the singer's octave */
   lowMidi: number;
   highMidi: number;
   /** less than a quarter of it was sung */
@@ -32,26 +42,29 @@ export interface PhraseMeasures extends Measures {
   sentence: string;
 }
 
-/** Pitches as wanted in the key, each with how it went: what evidence for keys is made from. */
+/** How one pitch of the tune went: what evidence for keys is made from. */
 export interface PitchMeasure {
-  /** MIDI number as the singer sang it to be: the wanted note in the singer's octave */
+  /** as wanted, in the singer's octave */
   midi: number;
-  /** seconds sung at it */
-  seconds: number;
-  /** duration-weighted mean distance in cents */
-  offCents: number;
-  /** it was fallen short of by half a semitone or more on most of its time */
-  fellShort: boolean;
+  /** seconds that were to be sung at it, in phrases that were sung */
+  wantedS: number;
+  sungS: number;
+  /** mean distance in cents; null where it was not sung */
+  offCents: number | null;
+  /** missed by half a semitone or more, or not sung, for most of its time, towards the middle of the voice */
+  fellShort: "above" | "below" | null;
 }
 
 /** A take held against the tune in a key. */
 export interface TakeMeasures extends Measures {
   /** octaves that the singer sang from the wanted notes */
   octaves: number;
-  /** the singer's own tuning in cents, -50 to 50 */
+  /** whole semitones that the singer sang from the key, -6 to 6; 0 where the key was kept */
+  moved: number;
+  /** what is left of the singer's own tuning, in cents */
   tuningCents: number;
   phrases: readonly PhraseMeasures[];
   pitches: readonly PitchMeasure[];
-  /** one or two plain sentences with glyphs */
+  /** one to three plain sentences with glyphs */
   summary: readonly string[];
 }

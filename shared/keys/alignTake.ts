@@ -28,7 +28,7 @@ export interface Alignment {
   octaves: number;
   /** the singer's common deviation in semitones after the octave, fractional, -6 to 6: 0.3 is 30 cents sharp */
   offset: number;
-  /** share of the sung time on the tune that lies within a semitone of it, 0 to 1: how far this is the tune */
+  /** share of all that was sung that lies on the tune and within a semitone of it, 0 to 1: how far this is the tune */
   fit: number;
 }
 
@@ -67,7 +67,7 @@ export function alignTake(wanted: readonly WantedNote[], f0: TakeReport["f0"], s
   if (pairs.length === 0) return null;
   const octaves = median(pairs.map((difference) => Math.round((difference - fine) / 12))) || 0;
   const near = pairs.filter((difference) => Math.abs(foldedSemitones(difference - fine)) < 1).length;
-  return { spans: spansOf(wanted, origin, frames), octaves, offset: fine, fit: near / pairs.length };
+  return { spans: spansOf(wanted, origin, frames), octaves, offset: fine, fit: near / voiced };
 }
 
 /** Pitches of the take in the path's frames; one with few voiced moments counts as silent. */

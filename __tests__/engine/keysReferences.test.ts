@@ -1,6 +1,5 @@
 import { scoreKeys } from "@/shared/keys/scoreKeys";
 import type { SingingVoice, Tune } from "@/shared/keys/keyScore";
-import { whyNotHigher } from "@/shared/keys/whyNotHigher";
 import { parseNoteName } from "@/shared/music/pitch";
 
 const midi = (name: string) => parseNoteName(name)!;
@@ -151,17 +150,6 @@ describe("keys for one singer", () => {
     const eased = scoreKeys(ferry, maren, { evidence: [{ midi: midi("G4"), effort: 5 }] });
     expect(eased[0]!.highMidi).toBeLessThan(scoreKeys(ferry, maren)[0]!.highMidi);
     expect(scoreKeys(ferry, maren, { evidence: [{ midi: midi("G4"), effort: 3 }] })).toEqual(scoreKeys(ferry, maren));
-  });
-
-  test("two keys are compared in one sentence", () => {
-    const keys = scoreKeys(ferry, maren);
-    const named = (tonic: string) => keys.find((key) => key.tonic === tonic)!;
-    expect(whyNotHigher(named("G"), named("C"))).toMatch(
-      /^G scores \d+ where C has \d+: D3 lies outside your range, 6 % of the tune\.$/,
-    );
-    expect(whyNotHigher(named("C"), named("E"))).toBe(whyNotHigher(named("E"), named("C")));
-    expect(whyNotHigher(named("E"), named("C"))).toContain("more of the tune leaves your comfort band");
-    expect(whyNotHigher(named("C"), named("C"))).toBe("C is compared with itself.");
   });
 
   test("a caller's mistake is refused: no notes, a note without length, bands upside down, no tonic", () => {

@@ -12,7 +12,7 @@ export interface TunePitch {
 }
 
 /** A note up to this many quarter notes long counts as passing. */
-const passingUpTo = 1;
+export const passingUpTo = 1;
 /** A note of this many quarter notes or more counts as held in full. */
 const heldFrom = 3;
 /** A passing note strains this much of what a held one does. */

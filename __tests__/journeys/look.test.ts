@@ -36,6 +36,7 @@ function screens(ferry: string): [path: string, ready: (page: Page) => Promise<u
     [`/songs/${ferry}/edit`, (page) => page.getByTestId("written-key").waitFor()],
     [`/songs/${ferry}/history`, (page) => page.getByRole("heading", { name: "Earlier versions" }).first().waitFor()],
     [`/songs/${ferry}/keys`, (page) => page.getByText("The Half-Past-Nine Ferry").first().waitFor()],
+    [`/songs/${ferry}/together`, (page) => page.getByTestId("together-empty").waitFor()],
     [`/songs/${ferry}/ways`, (page) => page.getByTestId("ways").waitFor()],
     ["/instruments", (page) => page.getByTestId("instrument-ukulele").waitFor()],
     ["/account", (page) => page.getByTestId("account-email").waitFor()],

@@ -10,7 +10,7 @@ import { octaveNote } from "./groupWords";
 import { groupScale } from "./groupScale";
 import { SpanScale } from "./SpanScale";
 
-const widths = { name: 150, score: 64, words: 230 } as const;
+const widths = { name: 140, score: 60, words: 270 } as const;
 const rowHeight = 51;
 
 export interface SpanTableProps {

@@ -18,6 +18,7 @@ export const clientRoutes = [
   "/songs/:id/ways",
   "/songs/:id/melody",
   "/songs/:id/recording",
+  "/songs/:id/try",
   "/instruments",
   "/account",
   "/account/sign-in",

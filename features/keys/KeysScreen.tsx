@@ -9,7 +9,7 @@ import { Skeleton } from "@/features/ui/Skeleton";
 import { Text } from "@/features/ui/Text";
 import { useLayout } from "@/features/ui/useLayout";
 import type { Song } from "@/shared/contract/song";
-import { PinBar } from "./compare/PinBar";
+import { CompareLink, PinBar } from "./compare/PinBar";
 import { usePinning } from "./compare/pins";
 import { DecidedLine } from "./decision/DecidedLine";
 import { KeyDeck } from "./deck/KeyDeck";
@@ -22,6 +22,7 @@ import { ReachLine } from "./ReachLine";
 import { songWords } from "./songWords";
 import type { FoundWays } from "./table/tableWays";
 import { WideKeys } from "./table/WideKeys";
+import { TogetherLink } from "./together/TogetherLink";
 import { decidedHere, decidedWords, type SongKeys } from "./useSongKeys";
 
 export interface KeysScreenProps {
@@ -66,6 +67,7 @@ export function KeysScreen({ song, keys, pending, voice, waysOf, instrument }: K
   const back = { label: song.title, href: { pathname: "/songs/[id]" as const, params: { id: song.id } } };
   const actions = selected && (
     <>
+      {wide && <CompareLink songId={song.id} pinning={pinning} kind="secondary" />}
       <LinkButton kind="secondary" small href={pageOf(selected)} label={`Ways to play ${selected.sign}`} />
       <Button
         small
@@ -154,9 +156,10 @@ export function KeysScreen({ song, keys, pending, voice, waysOf, instrument }: K
             </View>
           )}
           <MoveByHand rows={rows} voice={keys.voice} selected={selected} onSelect={look} />
-          <PinBar songId={song.id} pinning={pinning} />
+          {!wide && <PinBar songId={song.id} pinning={pinning} />}
         </>
       )}
+      {song.tune && <TogetherLink songId={song.id} />}
     </Screen>
   );
 }

@@ -23,7 +23,7 @@ export function CompareHead({ row, group, on, onSelect, onUnpin, mark }: Compare
   const [focused, setFocused] = useState(false);
   const parts = keySignParts(row.key);
   return (
-    <th scope="col" style={{ ...head, ...(on ? { boxShadow: `inset 4px 0 0 ${colors.plum}` } : null) }}>
+    <th scope="col" style={{ ...head, borderLeft: `4px solid ${on ? colors.plum : "transparent"}` }}>
       <label style={{ display: "block", cursor: "pointer", position: "relative", paddingRight: 28 }}>
         <input
           type="radio"
@@ -38,6 +38,7 @@ export function CompareHead({ row, group, on, onSelect, onUnpin, mark }: Compare
         <span
           style={{
             display: "flex",
+            flexWrap: "wrap",
             alignItems: "baseline",
             columnGap: 14,
             ...(focused ? { outline: `2px solid ${colors.plum}`, outlineOffset: 3, borderRadius: 4 } : null),
@@ -47,7 +48,7 @@ export function CompareHead({ row, group, on, onSelect, onUnpin, mark }: Compare
             {setSigns(glyphs(parts.large))}
             {parts.mode !== "" && <small style={{ font: `600 15px/1 ${fonts.display}` }}>{` ${parts.mode}`}</small>}
           </span>
-          <span>
+          <span style={{ whiteSpace: "nowrap" }}>
             <span
               style={{
                 font: `600 20px/1 ${fonts.display}`,
@@ -81,8 +82,8 @@ export function CompareHead({ row, group, on, onSelect, onUnpin, mark }: Compare
 
 const head: CSSProperties = {
   position: "relative",
-  padding: "6px 20px 10px",
-  verticalAlign: "bottom",
+  padding: "6px 20px 10px 16px",
+  verticalAlign: "top",
   textAlign: "left",
   fontWeight: 400,
   borderBottom: `1.5px solid ${colors.ink}`,

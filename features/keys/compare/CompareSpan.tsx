@@ -118,17 +118,29 @@ export function CompareSpan({ row, voice, scale, width }: CompareSpanProps) {
           </G>
         );
       })}
-      <Dimension x={room} from={top} to={y(row.highMidi)} semitones={row.above.semitones} side="above" />
-      <Dimension x={room} from={bottom} to={y(row.lowMidi)} semitones={row.below.semitones} side="below" />
+      <Dimension
+        x={room}
+        from={y(voice.range.highMidi)}
+        to={y(row.highMidi)}
+        semitones={row.above.semitones}
+        side="above"
+      />
+      <Dimension
+        x={room}
+        from={y(voice.range.lowMidi)}
+        to={y(row.lowMidi)}
+        semitones={row.below.semitones}
+        side="below"
+      />
     </Svg>
   );
 }
 
 interface DimensionProps {
   x: number;
-  /** end of the range */
+  /** last note of the range */
   from: number;
-  /** the tune's end */
+  /** last note of the tune */
   to: number;
   semitones: number;
   side: "above" | "below";
@@ -143,8 +155,8 @@ function Dimension({ x, from, to, semitones, side }: DimensionProps) {
   const rise = side === "above" ? -5.6 : 5.6;
   return (
     <G>
-      {semitones !== 0 && <Line x1={x} x2={x} y1={from} y2={to} stroke={color} strokeWidth={1.2} />}
-      {[from, to].map((end) => (
+      <Line x1={x} x2={x} y1={from} y2={to} stroke={color} strokeWidth={1.2} />
+      {[...new Set([from, to])].map((end) => (
         <Line key={end} x1={x - tick} x2={x + tick} y1={end} y2={end} stroke={color} strokeWidth={1.2} />
       ))}
       {past && <Path d={`M${x + 8} ${middle - rise / 2}h7l-3.5 ${rise}z`} fill={color} />}

@@ -1,5 +1,6 @@
 import { View } from "react-native";
 import { Button } from "@/features/ui/Button";
+import { IconButton } from "@/features/ui/IconButton";
 import { LinkButton } from "@/features/ui/LinkButton";
 import { LiveText } from "@/features/ui/LiveText";
 import { colors, sizes } from "@/features/ui/theme";
@@ -15,25 +16,20 @@ export interface PinBarProps {
 /** Says at the foot of the page which keys are pinned, and leads to them side by side. */
 export function PinBar({ songId, pinning }: PinBarProps) {
   const phone = useLayout() === "phone";
-  const { rows, room } = pinning;
-  if (rows.length === 0) return null;
-  const signs = rows.map(({ sign }) => sign).join(", ");
-  const more = rows.length === 1 ? " Pin another one to compare them." : room ? "" : " Four is the most.";
+  if (pinning.rows.length === 0) return null;
   return (
     <View
       testID="pin-bar"
-      {...webProps({ "data-bar": "" })}
+      {...webProps({ dataSet: { bar: "" } })}
       style={[
         {
           flexDirection: "row",
-          flexWrap: "wrap",
           alignItems: "center",
-          justifyContent: "space-between",
-          columnGap: 12,
-          rowGap: 4,
+          columnGap: 4,
           marginTop: 16,
-          paddingVertical: 8,
-          paddingHorizontal: 16,
+          paddingVertical: 6,
+          paddingLeft: 16,
+          paddingRight: 8,
           borderRadius: sizes.radius,
           borderWidth: 1.5,
           borderColor: colors.plum,
@@ -43,32 +39,57 @@ export function PinBar({ songId, pinning }: PinBarProps) {
         webStyle({ position: "sticky", bottom: phone ? `calc(${sizes.bar + 8}px + env(safe-area-inset-bottom))` : 12 }),
       ]}
     >
-      <View style={{ flexShrink: 1, flexGrow: 1, flexBasis: phone ? 120 : "auto" }}>
+      <View style={{ flexShrink: 1, flexGrow: 1 }}>
         <LiveText variant="small" style={{ fontWeight: "500" }}>
-          {`Pinned: ${signs}.${more}`}
+          {pinnedWords(pinning)}
         </LiveText>
       </View>
-      <View style={{ flexDirection: "row", alignItems: "center", gap: 8 }}>
+      <IconButton icon="close" label="Unpin all" color={colors.plum} onPress={pinning.clear} testID="unpin-all" />
+      <CompareLink songId={songId} pinning={pinning} kind="primary" />
+    </View>
+  );
+}
+
+/** The same as words in a row of others: the wide page has its button in the head. */
+export function PinLine({ pinning }: { pinning: Pinning }) {
+  return (
+    <View {...webProps({ dataSet: { bar: "" } })} style={{ flexDirection: "row", alignItems: "center", columnGap: 4 }}>
+      <LiveText variant="small" tone="soft" testID="pin-line">
+        {pinning.rows.length === 0 ? "" : pinnedWords(pinning)}
+      </LiveText>
+      {pinning.rows.length > 0 && (
         <Button
           kind="text"
           small
-          label={phone ? "Unpin" : "Unpin all"}
-          accessibleName="Unpin all"
+          label="Unpin all"
           onPress={pinning.clear}
           testID="unpin-all"
+          style={{ marginVertical: -8 }}
         />
-        {rows.length > 1 && (
-          <LinkButton
-            small
-            label={`Compare ${rows.length} keys`}
-            href={{
-              pathname: "/songs/[id]/compare",
-              params: { id: songId, keys: rows.map(({ shift }) => shift).join(",") },
-            }}
-            testID="compare-pinned"
-          />
-        )}
-      </View>
+      )}
     </View>
   );
+}
+
+/** Leads to the pinned keys side by side, once there are two. */
+export function CompareLink({ songId, pinning: { rows }, kind }: PinBarProps & { kind: "primary" | "secondary" }) {
+  if (rows.length < 2) return null;
+  return (
+    <LinkButton
+      small
+      kind={kind}
+      label={`Compare ${rows.length} keys`}
+      href={{
+        pathname: "/songs/[id]/compare",
+        params: { id: songId, keys: rows.map(({ shift }) => shift).join(",") },
+      }}
+      testID="compare-pinned"
+    />
+  );
+}
+
+function pinnedWords({ rows, room }: Pinning): string {
+  const signs = rows.map(({ sign }) => sign).join(", ");
+  if (rows.length === 1) return `Pinned: ${signs}. Pin another one to compare.`;
+  return `Pinned: ${signs}.${room ? "" : " Four is the most."}`;
 }

@@ -39,5 +39,9 @@ export function compareY(midi: number, scale: Scale): number {
 
 /** Where in a column the tune and the dimension lines stand, and how long the longest mark is. */
 export function comparePlaces(width: number): { tune: number; room: number; longest: number } {
-  return { tune: Math.round(width * 0.42), room: Math.round(width * 0.79), longest: Math.round(width * 0.44) };
+  return {
+    tune: Math.round(width * 0.42),
+    room: Math.round(Math.min(width * 0.79, width - 68)),
+    longest: Math.round(width * 0.44),
+  };
 }

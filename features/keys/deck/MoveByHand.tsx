@@ -35,7 +35,7 @@ export function MoveByHand({ rows, voice, selected, onSelect }: MoveByHandProps)
     0,
   );
   return (
-    <View testID="move-by-hand" {...webProps({ "data-screen": "" })} style={{ marginTop: 28, gap: 12 }}>
+    <View testID="move-by-hand" {...webProps({ dataSet: { screen: "" } })} style={{ marginTop: 28, gap: 12 }}>
       <View style={{ gap: 2 }}>
         <Heading level={2}>Move it by hand</Heading>
         <Text variant="small" tone="soft">
@@ -75,7 +75,9 @@ export function MoveByHand({ rows, voice, selected, onSelect }: MoveByHandProps)
           <Text variant="strong" style={{ lineHeight: 21, minHeight: 63 }}>
             {row.reason}
           </Text>
-          <KeyPartBars parts={row.parts} />
+          <View style={{ flexDirection: "row" }}>
+            <KeyPartBars parts={row.parts} />
+          </View>
           <Button
             kind="secondary"
             small

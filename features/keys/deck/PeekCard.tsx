@@ -24,6 +24,8 @@ export interface PeekCardProps {
 /** A neighbour of the card in the middle: only the edge that shows, its marks at the heights they have on the full card. */
 export function PeekCard({ row, voice, side, roomy }: PeekCardProps) {
   const width = roomy ? 96 : 30;
+  // Behind the last card in sight more of the next one shows than between two.
+  const drawn = !roomy && side === "left" ? 64 : width;
   const id = useDrawingId();
   const scale = ladderScale(voice, row.marks, 0);
   const y = (midi: number) => yOf(midi, scale, step, pad);
@@ -38,13 +40,13 @@ export function PeekCard({ row, voice, side, roomy }: PeekCardProps) {
           {row.score}
         </Text>
       </View>
-      <Svg width={width} height={y(scale.low) + pad} aria-hidden>
+      <Svg width={drawn} height={y(scale.low) + pad} aria-hidden>
         <Hatch id={id} pitch={4} line={1.6} />
         {rungs.map((midi) => (
           <Line
             key={midi}
             x1={0}
-            x2={width}
+            x2={drawn}
             y1={y(midi)}
             y2={y(midi)}
             stroke={midi % 12 === 0 ? mixtures.rungC : colors.line}

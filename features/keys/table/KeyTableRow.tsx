@@ -115,9 +115,15 @@ export function KeyTableRow({
               font: `500 12px/13px ${fonts.text}`,
               color: colors.inkSoft,
               flex: parts.mode === "" ? "1 1 40px" : "1 0 100%",
+              paddingRight: 6,
             }}
           >
             {row.moved}
+            {mark !== null && (
+              <strong style={{ display: "block", fontWeight: 600, color: colors.plum }}>
+                {`${mark.charAt(0).toUpperCase()}${mark.slice(1)}`}
+              </strong>
+            )}
           </span>
         </span>
       </th>
@@ -135,11 +141,6 @@ export function KeyTableRow({
           <span
             style={{ font: `400 13px/16px ${fonts.text}`, color: on ? colors.ink : colors.inkSoft, paddingRight: 12 }}
           >
-            {mark !== null && (
-              <strong style={{ display: "block", fontWeight: 600, color: colors.plum }}>
-                {`${mark.charAt(0).toUpperCase()}${mark.slice(1)}`}
-              </strong>
-            )}
             {setSigns(row.reason.replace(/\.$/, ""))}
           </span>
         </div>

@@ -8,11 +8,13 @@ export function PrintSheet({ zoom }: PrintSheetProps) {
   return (
     <style media="print">
       {`@page{size:A4 landscape;margin:9mm}
-[role=banner]>div>a,[role=banner] [role=button],a[data-button],main [role=button],[role=main] [role=button],[data-screen]{display:none!important}
+html,body,#root{background:#fff!important}
+body{zoom:${zoom}}
+[role=banner]>div>a,[role=banner] [role=button],a[data-button],[role=main] [role=button],[data-screen],[data-testid=decided],input[type=radio]{display:none!important}
 [role=main]{max-width:none!important}
-[data-testid=key-table],[data-testid=compare]{zoom:${zoom};overflow:visible!important}
-[data-testid=key-table] *,[data-testid=compare] *{position:static!important}
-[data-testid=key-table] tr,[data-testid=compare] tr{break-inside:avoid}
+[data-testid=compare]{overflow:visible!important}
+th,td{position:relative!important;left:auto!important;top:auto!important}
+tr{break-inside:avoid}
 *{print-color-adjust:exact;-webkit-print-color-adjust:exact}`}
     </style>
   );

@@ -35,7 +35,7 @@ export function WideKeys({ rows, voice, selected, onSelect, pinning, waysOf, ins
   const facts = { pinned: pinning.has, wayOf: (row: KeyRow) => bestWay(waysOf(row), filter) };
   return (
     <>
-      <PrintSheet zoom={0.8} />
+      <PrintSheet zoom={0.74} />
       <KeySentence
         rows={rows}
         filter={filter}
@@ -45,6 +45,7 @@ export function WideKeys({ rows, voice, selected, onSelect, pinning, waysOf, ins
         chooser={instrument?.chooser ?? null}
         left={left.length}
         searching={searching}
+        pinning={pinning}
       />
       {left.length === 0 && isFiltering(filter) ? (
         <EmptyState

@@ -75,6 +75,49 @@ test.each(["phone", "wide"] as const)(
   60_000,
 );
 
+test("reading can be stopped, and the sound ends with the page", async () => {
+  const { context, page, errors } = await stage.open("none", "phone");
+  await page.addInitScript(() => {
+    const opened: AudioContext[] = [];
+    const Plain = window.AudioContext;
+    Object.assign(window, {
+      opened,
+      AudioContext: class extends Plain {
+        constructor(options?: AudioContextOptions) {
+          super(options);
+          opened.push(this);
+        }
+      },
+    });
+  });
+  let letGo = () => {};
+  const held = new Promise<void>((done) => (letGo = done));
+  await context.route("**/songFileWorker.js", async (route) => {
+    await held;
+    await route.continue().catch(() => undefined);
+  });
+  await page.goto("/songs/new");
+  await page.getByRole("radio", { name: /^From a file/ }).click();
+  await give(page, { name: "quay.mxl", buffer: packedScore() });
+  await page.getByRole("button", { name: "Stop reading" }).click();
+  await page.getByText(/ABC, MIDI or MusicXML, at most 5 MB/).waitFor();
+  expect(await page.evaluate(() => document.activeElement?.textContent)).toMatch(/Choose a file/);
+  letGo();
+
+  await give(page, { name: "steps.abc", buffer: Buffer.from(abc) });
+  await page.getByText(/23 notes, A3 to B4/).waitFor();
+  await page.getByTestId("melody-hear").click();
+  await page.getByRole("button", { name: "Stop the melody" }).waitFor();
+  await page.getByRole("link", { name: "Voice" }).click();
+  await page.getByRole("heading", { level: 1, name: "Your voice" }).waitFor();
+  await page.waitForFunction(() => {
+    const { opened } = window as unknown as { opened: AudioContext[] };
+    return opened.length > 0 && opened.every((sound) => sound.state === "closed");
+  });
+  expect(errors).toEqual([]);
+  await context.close();
+}, 60_000);
+
 /** Longest stretch in ms for which the page answered to nothing while it read a file that is refused after long work. */
 async function longestBlock(page: Page, path: string): Promise<number> {
   await page.evaluate(() => {

@@ -13,7 +13,7 @@ import { useTapTone } from "../melody/entry/useTapTone";
 import { useTunePlayer } from "../melody/useTunePlayer";
 import { MelodyPicture } from "./MelodyPicture";
 import { readSongFile, type SongFile } from "./readSongFile";
-import { takenFromFile } from "./takenFromFile";
+import { type Filled, takenFromFile } from "./takenFromFile";
 import { VoiceChoice } from "./VoiceChoice";
 
 export interface MelodyFileFieldProps {
@@ -22,7 +22,7 @@ export interface MelodyFileFieldProps {
   onChange: (change: Partial<SongDraft>) => void;
 }
 
-type Found = Extract<SongFile, { ok: true }> & { name: string; chosen: number; taken: string | null };
+type Found = Extract<SongFile, { ok: true }> & { name: string; chosen: number; taken: string | null; filled: Filled };
 
 /** Quarter notes a minute where neither the file nor the form tells a speed. */
 const usualTempo = 96;
@@ -30,6 +30,7 @@ const usualTempo = 96;
 /** A melody from a file: choose it, choose among its voices, see and hear what came out, take its words. */
 export function MelodyFileField({ draft, error, onChange }: MelodyFileFieldProps) {
   const input = useRef<HTMLInputElement>(null);
+  const buttons = useRef<View>(null);
   const noteId = useId();
   const reading = useRef<AbortController | null>(null);
   const [busy, setBusy] = useState(false);
@@ -64,13 +65,16 @@ export function MelodyFileField({ draft, error, onChange }: MelodyFileFieldProps
       setRefusal(`${given.name}: ${result.reason}`);
       return;
     }
-    const { change, words } = takenFromFile(draft, result);
-    choose({ ...result, name: given.name, chosen: result.proposed, taken: words }, result.proposed, change);
+    const { change, words } = takenFromFile(draft, result, file?.filled);
+    const found = { ...result, name: given.name, chosen: result.proposed, taken: words, filled: change };
+    choose(found, result.proposed, change);
   };
   const cancel = () => {
     reading.current?.abort();
     reading.current = null;
     setBusy(false);
+    // The button that was pressed goes away.
+    (buttons.current as unknown as HTMLElement | null)?.querySelector("button")?.focus();
   };
   const problem = refusal ?? error;
   const lyrics = file?.voices[file.chosen]?.lyrics;
@@ -92,7 +96,7 @@ export function MelodyFileField({ draft, error, onChange }: MelodyFileFieldProps
           if (given) void read(given);
         }}
       />
-      <View style={{ flexDirection: "row", flexWrap: "wrap", gap: 8 }}>
+      <View ref={buttons} style={{ flexDirection: "row", flexWrap: "wrap", gap: 8 }}>
         <Button
           kind="secondary"
           small

@@ -164,8 +164,12 @@ test("a singer is renamed, changed and left out", () => {
   type("singer-highest", "F4");
   press("singer-keep");
   expect(screen.getByText("Typed, G2 to F4")).toBeTruthy();
+  expect(screen.queryByTestId("add-singers")).toBeNull();
   fireEvent.click(screen.getByRole("button", { name: "Leave out Old Ben" }));
   expect(screen.getAllByTestId("singer")).toHaveLength(1);
+  // With fewer than two, the places that singers come from stand open.
+  expect(screen.getByTestId("add-singers")).toBeTruthy();
+  expect(document.activeElement?.textContent).toBe("Who sings");
 });
 
 test("the decided key is kept for whoever sings, with its reason", async () => {

@@ -28,6 +28,7 @@ export function SingersPane({ singers, known, last, own, judged, readNotes, onCh
   const change = (next: Singer[], said: string) => {
     // What was pressed may be gone with the singer.
     if (next.length < singers.length || singers.length === 0) heading.current?.focus();
+    if (next.length < 2) setAdding(true);
     onChange(next, said);
   };
   const used = voiceTypes.filter(({ id }) => singers.some((singer) => singer.kind === "type" && singer.type === id));

@@ -1,18 +1,11 @@
 import { keyFifths, spellTonic, tonicPitchClass, type Mode } from "../music/keyName";
 import { pitchClass } from "../music/pitch";
+import { type EffortEvidence, narrowedComfort } from "./keyEvidence";
 import { keyParts, voiceEdges, type VoiceEdges } from "./keyParts";
 import { keyReason } from "./keyReason";
 import { compareTies, nearestMove } from "./keyTies";
 import type { KeyMark, KeyScore, SingingVoice, Tune } from "./keyScore";
-import { nearestSemitone } from "./nearestSemitone";
 import { tunePitches, type TunePitch } from "./tunePicture";
-
-/** How one sung pitch felt to the singer afterwards. */
-interface EffortEvidence {
-  midi: number;
-  /** 1 (no effort) to 5 (very hard) */
-  effort: number;
-}
 
 /** What else is known besides tune and voice. */
 export interface KeyOptions {
@@ -24,8 +17,6 @@ export interface KeyOptions {
   evidence?: readonly EffortEvidence[];
 }
 
-/** From this effort on a pitch was hard to sing. */
-const hardFrom = 4;
 /** A voice may be written this many octaves away from where it sings. */
 const octavesAway = 5;
 /**
@@ -33,6 +24,8 @@ const octavesAway = 5;
  * its octave is chosen within these; a narrower one stays there by itself.
  */
 const singable = { low: 24, high: 96, widest: 30 };
+/** A wider tune than this, in semitones, cannot be moved to every tonic between MIDI 0 and 127. */
+const widestOfAll = 116;
 
 /**
  * Judges all twelve keys for one voice, each in the octave where it sits best.
@@ -44,7 +37,7 @@ const singable = { low: 24, high: 96, widest: 30 };
  * @param voice range and comfort band, fractional MIDI numbers
  * @param options mode, present key, and takes rated by effort
  * @returns twelve keys, best first; ties by fewest accidentals, then by closeness to the present key
- * @throws RangeError if the tune is empty, a band is upside down or a tonic is no note name
+ * @throws RangeError if the tune is empty or spans more than 116 semitones, a band is upside down or a tonic is no note name
  * @see C. Herbst et al., Int. J. Research in Choral Singing 4(1), 2012: upper and lower reserve, tessitura shift (LR - UR)/2
  */
 export function scoreKeys(tune: Tune, voice: SingingVoice, options: KeyOptions = {}): KeyScore[] {
@@ -52,6 +45,8 @@ export function scoreKeys(tune: Tune, voice: SingingVoice, options: KeyOptions =
   const home = tonicPitchClass(tune.home);
   const edges = narrowed(voiceEdges(voice), options.evidence ?? []);
   const pitches = tunePitches(tune);
+  if (pitches[pitches.length - 1]!.midi - pitches[0]!.midi > widestOfAll)
+    throw new RangeError("a tune spans at most 116 semitones");
   const coarse = tune.kind === "span";
   const keys = Array.from({ length: 12 }, (_, pc) => bestOctave(pitches, edges, home, pc, mode, coarse));
   const ties = compareTies(mode, options.presentKey ?? tune.home);
@@ -69,10 +64,11 @@ function bestOctave(
   const near = nearestMove(home, tonicPc);
   const [lowest, highest] = [pitches[0]!.midi, pitches[pitches.length - 1]!.midi];
   const tooWide = highest - lowest > singable.widest;
-  // Below MIDI 0 notes have no names.
-  const floor = tooWide ? singable.low : 0;
+  const past = (shift: number, low: number, high: number) =>
+    Math.max(0, low - lowest - shift) + Math.max(0, highest + shift - high);
+  // Below MIDI 0 and above 127 notes have no names, so that weighs most.
   const outside = (shift: number) =>
-    Math.max(0, floor - lowest - shift) + (tooWide ? Math.max(0, highest + shift - singable.high) : 0);
+    1000 * past(shift, 0, 127) + (tooWide ? past(shift, singable.low, singable.high) : 0);
   const octaves = Array.from({ length: 2 * octavesAway + 1 }, (_, k) => k - octavesAway);
   const least = Math.min(...octaves.map((octave) => outside(near + 12 * octave)));
   const best = octaves
@@ -137,12 +133,6 @@ function zoneOf(midi: number, edges: VoiceEdges): KeyMark["zone"] {
 
 /** Pulls the comfort band in, away from pitches that felt hard; narrowing a band never raises a score. */
 function narrowed(edges: VoiceEdges, evidence: readonly EffortEvidence[]): VoiceEdges {
-  const middle = (edges.comfortLow + edges.comfortHigh) / 2;
-  const hard = evidence.filter(({ effort }) => effort >= hardFrom).map(({ midi }) => nearestSemitone(midi));
-  const tops = hard.filter((midi) => midi > middle).map((midi) => Math.max(midi - 1, Math.floor(middle)));
-  const bottoms = hard.filter((midi) => midi <= middle).map((midi) => Math.min(midi + 1, Math.ceil(middle)));
-  const comfortHigh = Math.min(edges.comfortHigh, ...tops);
-  const comfortLow = Math.max(edges.comfortLow, ...bottoms);
-  // With both halves hard one semitone in the middle is left.
-  return { ...edges, comfortHigh: Math.max(comfortHigh, comfortLow), comfortLow };
+  const band = narrowedComfort({ lowMidi: edges.comfortLow, highMidi: edges.comfortHigh }, evidence);
+  return { ...edges, comfortLow: band.lowMidi, comfortHigh: band.highMidi };
 }

@@ -61,7 +61,7 @@ export function noKeyForAll(keys: readonly GroupKey[]): string | null {
   if (!first || keys.some(({ beyond }) => !beyond)) return null;
   const out = first.parts.filter(({ fit }) => fit === "beyond");
   const names = out.length <= namedUpTo ? listWords(out.map(({ name }) => name)) : `${out.length} singers`;
-  if (out.length === first.parts.length)
+  if (keys.every(({ parts }) => parts.every(({ fit }) => fit === "beyond")))
     return `In every key the tune leaves everybody’s range somewhere; ${first.sign} is the least unfair. Share the tune out: let each sing the lines that lie well, or choose another song.`;
   const one = out.length === 1;
   return `No key holds the whole tune for everybody. In ${first.sign}, the fairest, it leaves the range of ${names}: let ${one ? "that singer" : "them"} leave those notes out or take a second part.`;

@@ -57,6 +57,10 @@ test.each([
   [440, 0.6, 30],
   [880, 1.2, 20],
   [1047, 1.6, 40],
+  [220, 1.6, 10],
+  [440, 0.6, 10],
+  [440, 0.6, 12],
+  [880, 1.2, 12],
 ])("an electronic tone of %d Hz is no voice", (hz, lengthS, snrDb) => {
   const tone = Float32Array.from({ length: rate * (lengthS + 0.8) }, (_, i) => {
     const t = i / rate - 0.4;
@@ -64,4 +68,19 @@ test.each([
     return 0.1 * edge * (Math.sin(2 * Math.PI * hz * t) + 0.3 * Math.sin(6 * Math.PI * hz * t));
   });
   expect(judge(addNoise(tone, rate, snrDb, createRandom(3))).verdict).toBe("not-singing");
+});
+
+test.each([[220, 40], [440, 10], [880, 12]])("nor is one that sounds four times (%d Hz, %d dB over the noise)", (hz, snrDb) => {
+  const [onS, everyS] = [0.8, 1.2];
+  const tone = Float32Array.from({ length: rate * 5 }, (_, i) => {
+    const t = (i / rate) % everyS;
+    return 0.1 * Math.max(0, Math.min(1, t / 0.01, (onS - t) / 0.01)) * (Math.sin(2 * Math.PI * hz * t) + 0.3 * Math.sin(6 * Math.PI * hz * t));
+  });
+  expect(judge(addNoise(tone, rate, snrDb, createRandom(4))).verdict).toBe("not-singing");
+});
+
+test.each(["bass", "alto", "soprano"] as const)("%s: held as well as can be in that noise, a note is heard", (voice) => {
+  const { low, high } = VOICES[voice];
+  const pcm = held(voice, [(low + high) / 2], 1.2, 6, true);
+  for (const snrDb of [10, 12]) expect(judge(addNoise(pcm, rate, snrDb, createRandom(5))).verdict).toBe("heard");
 });

@@ -4,6 +4,7 @@ import { powerAt } from "./harmonicPresence";
 import { findCandidates, HIGHEST_HZ, type CandidateFrame, type PitchCandidate } from "./pitchCandidates";
 import { createPathFinder } from "./pitchPath";
 import { measureRoom, type RoomFloor } from "./roomFloor";
+import { markSecondVoices } from "./secondVoice";
 
 const OVERTONE_FROM_MIDI = 76;
 /** What measuring takes of the time; choosing among what was measured takes the rest. */
@@ -17,7 +18,7 @@ export interface TrackFrame {
   clarity: number;
   levelDb: number;
   aboveRoomDb: number;
-  /** several sounds at once: only a common period was found */
+  /** several sounds at once: only a common period was found, or another pitch beside the decided one */
   mixed: boolean;
   /** second harmonic against the first in dB, for pitches from E5 up; null elsewhere */
   overtoneDb: number | null;
@@ -79,7 +80,7 @@ export function trackPitch(
         ? overtone(lagFrames[k]!.r, point.candidate.hz)
         : null,
   }));
-  return { frames, room };
+  return { frames: markSecondVoices(frames, sound), room };
 }
 
 /** Puts the decision and the frame it was made on together; a decision above the search limit counts as no voice. */

@@ -42,7 +42,28 @@ test("still is only what neither wavers nor flutters", () => {
   expect(findSigns(...held(64, { bendCents: 0.1, steadinessCents: 4 })).still).toBe(false);
 });
 
-test("in a guided hold only a generator's tone is still", () => {
-  expect(findSigns(...held(64, { bendCents: 0.1, steadinessCents: 1 }), true).still).toBe(false);
-  expect(findSigns(...held(64, { bendCents: 0.1, steadinessCents: 0.2 }), true).still).toBe(true);
+test("in a guided hold only a pitch that does not move is still", () => {
+  const [frames, notes] = held(64, { bendCents: 0.1, steadinessCents: 0.3 });
+  const moving = (cents: number) => frames.map((f, k) => ({ ...f, hz: f.hz! * 2 ** ((cents / 1200) * Math.sin(k / 30)) }));
+  expect(findSigns(frames, notes, true).still).toBe(true);
+  expect(findSigns(moving(2), notes, true).still).toBe(false);
+});
+
+test("noise moves a tone a little, and a singer's waver tells the two apart", () => {
+  const [frames, notes] = held(64, { bendCents: 0.1 });
+  const moving = frames.map((f, k) => ({ ...f, hz: f.hz! * 2 ** ((0.8 / 1200) * Math.sin(k / 30)) }));
+  const wavering = (steadinessCents: number) => findSigns(moving, [{ ...notes[0]!, steadinessCents }], true).still;
+  expect([wavering(0.4), wavering(1.2)]).toEqual([true, false]);
+});
+
+test("notes that begin at their loudest and fade at a still pitch are struck", () => {
+  const notes = (levelDb: (k: number) => number, steadinessCents = 2) => {
+    const [frames, [note]] = held(64);
+    const four = [0, 1, 2, 3].map((n) => ({ ...note!, midi: 60 + n, start: n / 2, end: n / 2 + 0.45, heldS: 0.45, steadinessCents }));
+    return findSigns(frames.map((f, k) => ({ ...f, levelDb: levelDb(k % 50) })), four).struck;
+  };
+  expect(notes((k) => -20 - 0.1 * k)).toBe(true);
+  expect(notes((k) => -20 - 0.1 * k, 8)).toBe(false);
+  expect(notes(() => -20)).toBe(false);
+  expect(notes((k) => -20 - 0.02 * (k - 25) ** 2)).toBe(false);
 });

@@ -17,6 +17,8 @@ export interface SingingSigns {
   cues: SpeechCues | null;
   /** pitch stiller than any throat holds it: a string, a pipe, a machine */
   still: boolean;
+  /** every note loudest where it begins and fading from there, at a still pitch: strings plucked or struck, bars, bells */
+  struck: boolean;
   /** a nearly pure tone, high up */
   whistled: boolean;
 }
@@ -27,11 +29,13 @@ const STILL_CENTS = 1.7;
 /** A throat's pitch bends by more than this within 80 ms, through jitter alone (the same singers: from 0.7 up). */
 const FLUTTER_CENTS = 0.6;
 /**
- * One held note may be held better than a phrase's notes, and nothing else about it can tell a machine: only what is as
- * still as a generator's tone counts (singers holding as well as they can: from 0.4 and 0.4 up together; tones: 0.4 and 0.2 at most).
+ * One held note may be held better than a phrase's notes, and nothing else about it can tell a machine: the mean of 150 ms
+ * moves by less than this many cents from one end of a tone to the other (tones in noise at 10 dB: up to 1.8; singers
+ * holding as well as they can: from 2.7 up), and where it moves by more than half of that the tone hardly wavers otherwise.
  */
-const STILL_HOLD_CENTS = 0.5;
-const HOLD_FLUTTER_CENTS = 0.3;
+const STILL_HOLD_DRIFT_CENTS = 2;
+const STILL_HOLD_CENTS = 0.45;
+const DRIFT_FRAMES = 15;
 /** Half the stretch, in frames of 10 ms, over which flutter is looked for. */
 const FLUTTER_REACH = 4;
 /** Two notes nearer than this, in semitones, may be the same pitch sung twice. */
@@ -44,6 +48,15 @@ const WHISTLE_FROM_MIDI = 76;
  */
 const PURE_BELOW_DB = -24;
 const PURE_SHARE = 0.75;
+/**
+ * Of the notes of a plucked or struck instrument (FluidR3: piano, guitars, vibraphone) 0.7 to 1 fade by more than this and
+ * begin at their loudest, of a singer's at most 0.6; strings and bars waver by up to 4 cents, about as little as the steadiest of singers.
+ */
+const FADE_DB_PER_S = 3;
+const FADING_SHARE = 0.7;
+const STRUCK_CENTS = 4.5;
+const LEAST_FADE_S = 0.2;
+const LEAST_STRUCK = 3;
 /** A second harmonic this far over the first is a whistle above the search limit, followed an octave too low. */
 const OCTAVE_LOW_DB = 20;
 
@@ -69,13 +82,32 @@ export function findSigns(frames: readonly TrackFrame[], notes: readonly HeardNo
     pitches: countPitches(clear),
     cues: clear.length > 0 ? speechCues(frames, clear, top - LOUD_WITHIN_DB) : null,
     still: isStill(frames, clear, hold),
+    struck: isStruck(frames, clear),
     whistled: clear.length > 0 && clear.every((n) => n.midi >= WHISTLE_FROM_MIDI) && isPure(frames),
   };
 }
 
 function isStill(frames: readonly TrackFrame[], clear: readonly HeardNote[], hold: boolean): boolean {
-  const [cents, fluttering] = hold ? [STILL_HOLD_CENTS, HOLD_FLUTTER_CENTS] : [STILL_CENTS, FLUTTER_CENTS];
-  return clear.length > 0 && median(clear.map((n) => n.steadinessCents)) < cents && flutter(frames, clear) < fluttering;
+  if (clear.length === 0) return false;
+  const wavering = median(clear.map((n) => n.steadinessCents));
+  if (!hold) return wavering < STILL_CENTS && flutter(frames, clear) < FLUTTER_CENTS;
+  const drifting = drift(frames, clear);
+  return drifting < STILL_HOLD_DRIFT_CENTS / 2 || (drifting < STILL_HOLD_DRIFT_CENTS && wavering < STILL_HOLD_CENTS);
+}
+
+/** Nobody begins three notes of four at their loudest, lets them die away, and holds them like a string. */
+function isStruck(frames: readonly TrackFrame[], clear: readonly HeardNote[]): boolean {
+  const measured = clear.filter((n) => n.end - n.start >= LEAST_FADE_S);
+  if (measured.length < LEAST_STRUCK || median(clear.map((n) => n.steadinessCents)) >= STRUCK_CENTS) return false;
+  const fading = measured.filter((n) => fades(frames.slice(Math.round(n.start * 100) + 3, Math.round(n.end * 100) - 5).map((f) => f.levelDb)));
+  return fading.length >= FADING_SHARE * measured.length;
+}
+
+/** Loudest in its first third, and falling along the line of least squares. */
+function fades(levels: readonly number[]): boolean {
+  const middle = (levels.length - 1) / 2;
+  const slope = levels.reduce((sum, level, k) => sum + level * (k - middle), 0) / levels.reduce((sum, _, k) => sum + (k - middle) ** 2, 0);
+  return levels.indexOf(Math.max(...levels)) < levels.length / 3 && 100 * slope < -FADE_DB_PER_S;
 }
 
 function isPure(frames: readonly TrackFrame[]): boolean {
@@ -102,6 +134,16 @@ function flutter(frames: readonly TrackFrame[], notes: readonly HeardNote[]): nu
     return own.length > 0 ? [median(own)] : [];
   });
   return bends.length > 0 ? median(bends) : Infinity;
+}
+
+/** Median over the notes of how far the pitch, averaged over 150 ms, moves inside a note, in cents. */
+function drift(frames: readonly TrackFrame[], notes: readonly HeardNote[]): number {
+  const moves = notes.flatMap((note) => {
+    const midi = inside(frames, note).flatMap((f) => (f.hz === null ? [] : [12 * Math.log2(f.hz)]));
+    const means = midi.slice(DRIFT_FRAMES - 1).map((_, i) => midi.slice(i, i + DRIFT_FRAMES).reduce((sum, m) => sum + m, 0) / DRIFT_FRAMES);
+    return means.length > 0 ? [100 * (Math.max(...means) - Math.min(...means))] : [];
+  });
+  return moves.length > 0 ? median(moves) : Infinity;
 }
 
 function inside(frames: readonly TrackFrame[], note: HeardNote): readonly TrackFrame[] {

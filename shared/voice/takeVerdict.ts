@@ -43,7 +43,7 @@ export function judgeTake(evidence: Evidence): Verdict {
   const signs = findSigns(frames, notes, hold);
   const enough = hold ? signs.heldS >= LEAST_HELD_IN_HOLD_S : signs.heldS >= LEAST_HELD_S && signs.pitches >= LEAST_PITCHES;
   // One high note on one vowel is as pure as a whistle, which only a line of several can tell.
-  if (signs.still || (signs.whistled && !hold)) return "not-singing";
+  if (signs.still || ((signs.whistled || signs.struck) && !hold)) return "not-singing";
   const sung = signs.voicedShare >= VOICED_AT_LEAST && (hold || signs.cues === null || likenessToSpeech(signs.cues) < 0);
   const monotone = signs.pitches < LEAST_PITCHES && signs.voicedShare >= VOICED_AT_LEAST && signs.heldS >= SUNG_LONG_S * notes.filter((n) => n.clear).length;
   if (enough && signs.mixedShare > MIXED_AT_MOST) return "several-voices";

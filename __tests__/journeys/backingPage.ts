@@ -9,6 +9,15 @@ interface Rendered {
   renderedMs: number;
 }
 
+interface Round {
+  least: number;
+  most: number;
+  pausedAt: number;
+  resumedAt: number;
+  silent: number | null;
+  stopped: number | null;
+}
+
 /** Renders the beginning of a plan in an offline context, and tells when something is struck in it. */
 async function render(plan: BackingPlan, seconds: number, sampleRate: number): Promise<Rendered> {
   const context = new OfflineAudioContext(1, seconds * sampleRate, sampleRate);
@@ -30,6 +39,8 @@ async function waitForPress(plan: BackingPlan): Promise<void> {
   const begun = performance.now();
   await backing.prepare();
   const preparedMs = performance.now() - begun;
+  // As on a page where nothing was pressed yet: browsers let its sound run from the first press on.
+  await context.suspend();
   const button = document.body.appendChild(document.createElement("button"));
   button.textContent = "Play";
   button.onclick = ({ timeStamp }) => {
@@ -50,4 +61,26 @@ async function waitForPress(plan: BackingPlan): Promise<void> {
   };
 }
 
-Object.assign(window, { render, waitForPress });
+/** Goes round in a stretch, pauses, goes on and stops; tells where it was heard to be. */
+async function goRound(plan: BackingPlan, loop: { at: number; end: number }): Promise<Round> {
+  const context = new AudioContext();
+  const backing = createBacking(plan, context);
+  backing.start({ from: loop.at, loop, countIn: false });
+  const places: number[] = [];
+  const turns = () => places.filter((place, k) => k > 0 && place < places[k - 1]! - 1e-3).length;
+  while (turns() < 2) {
+    await new Promise((next) => setTimeout(next, 20));
+    places.push(backing.heard()!);
+  }
+  backing.pause();
+  const silent = backing.heard();
+  const pausedAt = places.at(-1)!;
+  backing.resume();
+  const resumedAt = backing.heard()!;
+  backing.stop();
+  const stopped = backing.heard();
+  await context.close();
+  return { least: Math.min(...places), most: Math.max(...places), pausedAt, resumedAt, silent, stopped };
+}
+
+Object.assign(window, { render, waitForPress, goRound });

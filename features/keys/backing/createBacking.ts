@@ -8,7 +8,7 @@ const lookOfflineS = 0.1;
 /** A page that is not seen is looked after once a second only. */
 const aheadUnseenS = 2.5;
 /** From the press to the first sound, beside what the device takes. */
-const leadS = 0.03;
+const leadS = 0.015;
 const fadeS = 0.03;
 const shortestLoopS = 0.2;
 /** A moderate level: a person's voice is heard over it. */

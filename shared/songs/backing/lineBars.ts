@@ -5,7 +5,7 @@ import type { Metre } from "./metre";
 import type { PlayedLine } from "./playedParts";
 
 /** A chord that begins `at` quarter notes after its bar's start; null where all is silent (N.C.). */
-export interface BarChord {
+interface BarChord {
   at: number;
   chord: Chord | null;
 }

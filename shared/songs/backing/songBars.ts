@@ -7,7 +7,7 @@ import { type PlayedLine, type PlayedPart, playedParts } from "./playedParts";
 import { type TuneLine, tuneOfLines } from "./tuneOfLines";
 
 /** A line of the song with its bars and the notes it is sung to. */
-export interface SongLine {
+interface SongLine {
   words: string | null;
   bars: Bar[];
   tune: TuneLine | null;

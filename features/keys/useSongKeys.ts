@@ -1,5 +1,5 @@
 import { useQuery } from "@tanstack/react-query";
-import { useMemo } from "react";
+import { useMemo, useState } from "react";
 import { newId } from "@/features/api/newId";
 import type { Decision } from "@/shared/contract/decision";
 import type { Song } from "@/shared/contract/song";
@@ -8,9 +8,12 @@ import { COARSE_WORDS } from "@/shared/keys/keyReason";
 import type { KeyName } from "@/shared/music/keyName";
 import { keySign } from "@/shared/music/keyWords";
 import { glyphs } from "@/shared/music/pitch";
-import { decide, decidedElsewhere, type Choice } from "./decision/decide";
+import { decide, decidedElsewhere, takenBack, type Choice } from "./decision/decide";
+import { decisionHistory, type DecisionHistory } from "./decision/decisionHistory";
 import { decisionFor, decisionQueries, useRemoveDecision, useSaveDecision } from "./decision/decisionQueries";
 import { noFitWords, wholeVoice, type KeyRow } from "./keyRows";
+import { triesOfVoice, voiceAfter } from "./tryout/triedRows";
+import { tryQueries } from "./tryout/tryQueries";
 import { keyInHand, keyRowsOf, songChords, writtenKeyOf, type KeyInHand } from "./songKeys";
 
 /** The keys of one song for one voice, with what was decided and the way to decide anew. */
@@ -22,17 +25,27 @@ export interface SongKeys {
   decision: Decision | null;
   /** the decided key's sign, and the name of the voice it was decided with where that is not the present one */
   decided: { sign: string; otherVoice: string | null } | null;
+  /** why the comfort band stands elsewhere than the voice alone would have it: what was tried */
+  tried: readonly string[];
   /** said where no key holds the whole tune */
   noFit: string | null;
   inHand: KeyInHand | null;
   /** the chords as written, and the key they stand in; null where there is none of either */
   written: { chords: string[]; from: KeyName } | null;
+  /** what was decided before and for other voices */
+  history: DecisionHistory | null;
+  /** the key that was just let go of, while it can be brought back */
+  removed: string | null;
   saving: boolean;
   error: Error | null;
   /** Keeps a key and says when it is kept; what kept it from that stays in `error`. */
   take: (choice: Pick<Choice, "tonic" | "shift" | "instrument" | "way">, done?: () => void) => void;
-  /** Lets the decided key go again. */
+  /** Takes the newest choice back: the one before holds again, or none. */
   undo: () => void;
+  /** Lets the decided key go with all its history. */
+  remove: () => void;
+  /** Brings back what was just let go. */
+  restore: () => void;
 }
 
 /** The voice that the keys are scored for, with its notes, and the voices there are. */
@@ -42,14 +55,25 @@ interface Singer {
   forKeys: SingingVoice | null;
 }
 
-export function useSongKeys(song: Song, { voice: singer, voices, forKeys: singing }: Singer): SongKeys {
+export function useSongKeys(song: Song, { voice: singer, voices, forKeys }: Singer): SongKeys {
   const decisions = useQuery(decisionQueries.all());
   const save = useSaveDecision();
   const remove = useRemoveDecision();
+  const tries = useQuery(tryQueries.all());
+  const tried = useMemo(
+    () => forKeys && voiceAfter(song, forKeys, triesOfVoice(tries.data ?? [], singer?.id ?? null)),
+    [song, forKeys, tries.data, singer?.id],
+  );
+  const singing = tried?.voice ?? null;
   const rows = useMemo(() => keyRowsOf(song, singing), [song, singing]);
   const voice = useMemo(() => singing && wholeVoice(singing), [singing]);
-  const decision = decisionFor(decisions.data ?? [], song.id);
+  const [gone, setGone] = useState<Decision | null>(null);
   const singerId = singer?.id ?? null;
+  const decision = decisionFor(decisions.data ?? [], song.id, singerId);
+  const mode = writtenKeyOf(song)?.mode ?? "major";
+  const letGo = () => {
+    if (decision) remove.mutate(decision.id, { onSuccess: () => setGone(decision) });
+  };
   const inHand = useMemo(() => keyInHand(song, rows, decision, singerId), [song, rows, decision, singerId]);
   const written = useMemo(() => {
     const from = writtenKeyOf(song);
@@ -61,14 +85,17 @@ export function useSongKeys(song: Song, { voice: singer, voices, forKeys: singin
     voice,
     decision,
     decided: decision && {
-      sign: glyphs(keySign({ tonic: decision.tonic, mode: writtenKeyOf(song)?.mode ?? "major" })),
+      sign: glyphs(keySign({ tonic: decision.tonic, mode })),
       otherVoice: decidedElsewhere(decision, singerId)
         ? (voices.find(({ id }) => id === decision.voiceId)?.name ?? "another voice")
         : null,
     },
+    tried: tried?.why ?? [],
     noFit: rows && noFitWords(rows),
     inHand,
     written,
+    history: decision && decisionHistory(decision, decisions.data ?? [], mode, voices),
+    removed: gone && gone.songId === song.id && !decision ? glyphs(keySign({ tonic: gone.tonic, mode })) : null,
     saving: save.isPending || remove.isPending,
     error: save.error ?? remove.error,
     take: (choice, done) => {
@@ -85,7 +112,13 @@ export function useSongKeys(song: Song, { voice: singer, voices, forKeys: singin
       });
     },
     undo: () => {
-      if (decision) remove.mutate(decision.id);
+      const before = decision && takenBack(decision);
+      if (before) save.mutate(before);
+      else letGo();
+    },
+    remove: letGo,
+    restore: () => {
+      if (gone) save.mutate(gone, { onSuccess: () => setGone(null) });
     },
   };
 }

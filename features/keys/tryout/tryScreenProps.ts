@@ -1,0 +1,24 @@
+import type { ReactNode } from "react";
+import type { Song } from "@/shared/contract/song";
+import type { SingingVoice } from "@/shared/keys/keyScore";
+import type { KeyName } from "@/shared/music/keyName";
+import type { ChartLine } from "@/shared/songs/chart";
+import type { SongKeys } from "../useSongKeys";
+import type { TryRecorder } from "./tryRecorder";
+import type { TriedKey } from "./tryWishes";
+
+/** What the page where a key is tried is given. */
+export interface TryScreenProps {
+  song: Song;
+  /** the key that is asked for */
+  to: KeyName;
+  shift: number;
+  keys: SongKeys;
+  singer: { id: string; name: string } | null;
+  /** the voice as keys are judged by, without what was tried */
+  voice: SingingVoice | null;
+  recorder: TryRecorder;
+  /** a line of the chart, chords over its syllables */
+  draw: (line: ChartLine) => ReactNode;
+  onKey: (key: TriedKey) => void;
+}

@@ -14,8 +14,8 @@ export function readOptions(args: readonly string[], names: readonly string[], f
   const options: NonNullable<ParseArgsConfig["options"]> = {};
   for (const name of names) options[name] = { type: "string" };
   for (const flag of flags) options[flag] = { type: "boolean" };
+  const joined = joinValues(args, names);
   try {
-    const joined = joinValues(args, names);
     const { values, positionals } = parseArgs({ args: joined, options, allowPositionals: true });
     const strings = Object.entries(values).filter((entry): entry is [string, string] => typeof entry[1] === "string");
     return {
@@ -28,7 +28,11 @@ export function readOptions(args: readonly string[], names: readonly string[], f
   }
 }
 
-/** "--shift -2" as "--shift=-2": otherwise the value would be taken for an option. */
+/**
+ * "--shift -2" as "--shift=-2": otherwise the value would be taken for an option.
+ *
+ * @throws BadInput where a value is missing
+ */
 function joinValues(args: readonly string[], names: readonly string[]): string[] {
   const joined: string[] = [];
   for (let k = 0; k < args.length; k++) {
@@ -36,7 +40,8 @@ function joinValues(args: readonly string[], names: readonly string[]): string[]
     if (names.some((name) => args[k] === `--${name}`) && next !== undefined && !next.startsWith("--")) {
       joined.push(`${args[k]}=${next}`);
       k++;
-    } else joined.push(args[k]!);
+    } else if (names.some((name) => args[k] === `--${name}`)) throw new BadInput(`${args[k]} wants a value.`);
+    else joined.push(args[k]!);
   }
   return joined;
 }
@@ -48,7 +53,7 @@ export function required(value: string | undefined, name: string): string {
 
 /** "E2-E4" as two MIDI numbers, low to high. */
 export function readBand(text: string, name: string): { lowMidi: number; highMidi: number } {
-  const match = /^(.*\d)-(.*\d)$/.exec(text.trim());
+  const match = /^(.*\d)\s*[-–—]\s*(.*\d)$/.exec(text.trim());
   const lowMidi = match ? parseNoteName(match[1]!) : null;
   const highMidi = match ? parseNoteName(match[2]!) : null;
   if (lowMidi === null || highMidi === null)

@@ -28,7 +28,9 @@ test.each([
     await page.getByTestId("singer-lowest").fill("G2");
     await page.getByTestId("singer-highest").fill("E4");
     await page.getByTestId("singer-keep").click();
+    await page.getByTestId("span-row").nth(2).waitFor();
     await page.getByTestId("adding").click();
+    await page.getByTestId("add-singers").waitFor({ state: "detached" });
     await page
       .getByTestId("octaves")
       .getByText(/Ben sings it an octave lower\./)

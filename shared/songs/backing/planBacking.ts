@@ -5,6 +5,7 @@ import type { MelodyNote } from "../melody";
 import type { BackingBeat, BackingEvent, BackingPlan, BackingStretch, BackingWishes, PlannedNote } from "./backingPlan";
 import { type ChordInTime, playHand } from "./handEvents";
 import { type Metre, metreOf } from "./metre";
+import { phraseBreaks } from "./phraseBreaks";
 import { songBars, type SongPart } from "./songBars";
 
 /** What is known of a song. */
@@ -145,15 +146,19 @@ function sungNotes(parts: readonly SongPart[], notes: readonly MelodyNote[], met
     const from = bar * metre.quarters;
     bar += bars.length;
     if (!tune) continue;
-    const moved = notes.slice(tune.from, tune.to).flatMap(({ start, duration, midi }) => {
-      const at = from + start - tune.bar * metre.quarters;
-      const fits = at >= 0 && at < length && start < (tune.bar + bars.length) * metre.quarters;
-      return fits ? [{ at, duration: Math.min(duration, length - at), midi, phrase: sung.phrases.length }] : [];
+    const own = notes.slice(tune.from, tune.to);
+    const begins = words === null ? phraseBreaks(own) : [0];
+    begins.forEach((begin, k) => {
+      const moved = own.slice(begin, begins[k + 1]).flatMap(({ start, duration, midi }) => {
+        const at = from + start - tune.bar * metre.quarters;
+        const fits = at >= 0 && at < length && start < (tune.bar + bars.length) * metre.quarters;
+        return fits ? [{ at, duration: Math.min(duration, length - at), midi, phrase: sung.phrases.length }] : [];
+      });
+      const last = moved.at(-1);
+      if (!last) return;
+      sung.phrases.push({ at: moved[0]!.at, end: last.at + last.duration, label: words?.trim() || null });
+      sung.notes.push(...moved);
     });
-    const last = moved.at(-1);
-    if (!last) continue;
-    sung.phrases.push({ at: moved[0]!.at, end: last.at + last.duration, label: words?.trim() || null });
-    sung.notes.push(...moved);
   }
   return sung;
 }

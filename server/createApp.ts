@@ -15,7 +15,7 @@ import { healthRoutes } from "./http/health.router";
 import { requestLog } from "./http/requestLog";
 import { securityHeaders } from "./http/securityHeaders";
 import { instrumentsRoutes } from "./instruments/instruments.router";
-import { decisionsRoutes } from "./keys/decisions.router";
+import { keysRoutes } from "./keys/keys.router";
 import { songsRoutes } from "./songs/songs.router";
 import { voicesRoutes } from "./voices/voices.router";
 
@@ -33,7 +33,7 @@ export function createApp(dataSource: DataSource, logger: Logger, settings: AppS
   authRoutes(api, dataSource, settings);
   voicesRoutes(api, dataSource);
   songsRoutes(api, dataSource);
-  decisionsRoutes(api, dataSource);
+  keysRoutes(api, dataSource);
   instrumentsRoutes(api, dataSource);
   chartsRoutes(api, dataSource);
   healthRoutes(api, dataSource);

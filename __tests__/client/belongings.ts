@@ -2,6 +2,7 @@ import type { Decision } from "@/shared/contract/decision";
 import type { OwnInstrument } from "@/shared/contract/instrument";
 import type { Song } from "@/shared/contract/song";
 import type { Take } from "@/shared/contract/take";
+import type { Try } from "@/shared/contract/try";
 import type { Voice } from "@/shared/contract/voice";
 
 let serial = 0;
@@ -67,6 +68,7 @@ export const aDecision = (songId: string, voiceId: string | null, change: Partia
   instrument: null,
   way: null,
   decidedAt: when,
+  earlier: [],
   ...change,
 });
 
@@ -80,5 +82,18 @@ export const anInstrument = (change: Partial<OwnInstrument> = {}): OwnInstrument
   capoTo: 7,
   leftHanded: false,
   favourite: true,
+  ...change,
+});
+
+export const aTry = (songId: string, voiceId: string | null, change: Partial<Try> = {}): Try => ({
+  id: nextId(),
+  songId,
+  voiceId,
+  tonic: "C",
+  shift: -2,
+  backing: true,
+  sungAt: when,
+  effort: 2,
+  measures: null,
   ...change,
 });

@@ -6,6 +6,7 @@ import type { SongQuestion } from "@/features/api/songQuestion";
 import { song, type Song } from "@/shared/contract/song";
 import type { SongVersion } from "@/shared/contract/songVersion";
 import { take } from "@/shared/contract/take";
+import { songTry } from "@/shared/contract/try";
 import { voice } from "@/shared/contract/voice";
 
 interface Person {
@@ -24,7 +25,14 @@ interface Row {
   item: { id: string } & Record<string, unknown>;
 }
 
-const schemas = { voices: voice, takes: take, songs: song, decisions: decision, instruments: ownInstrument };
+const schemas = {
+  voices: voice,
+  takes: take,
+  songs: song,
+  decisions: decision,
+  tries: songTry,
+  instruments: ownInstrument,
+};
 type Name = keyof typeof schemas;
 
 const problem = (status: number, code: string, message: string, fields?: unknown): Answer => ({
@@ -44,6 +52,7 @@ export class FakeApi {
     takes: new Map(),
     songs: new Map(),
     decisions: new Map(),
+    tries: new Map(),
     instruments: new Map(),
   };
   /** Earlier states of songs, by their id, newest first. Each change keeps the state before: nobody pauses here. */

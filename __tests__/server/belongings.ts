@@ -3,6 +3,7 @@ import type { Decision } from "../../shared/contract/decision";
 import type { OwnInstrument } from "../../shared/contract/instrument";
 import type { Song } from "../../shared/contract/song";
 import type { Take } from "../../shared/contract/take";
+import type { Try } from "../../shared/contract/try";
 import type { Voice } from "../../shared/contract/voice";
 
 const instant = "2026-11-24T19:20:00.000Z";
@@ -63,6 +64,7 @@ export function aDecision(songId: string, voiceId: string | null, changes: Parti
     instrument: "box-adf",
     way: { retune: 0, capo: 1, shapeKey: "A" },
     decidedAt: instant,
+    earlier: [],
     ...changes,
   };
 }
@@ -81,6 +83,44 @@ export function anInstrument(changes: Partial<OwnInstrument> = {}): OwnInstrumen
     capoTo: 7,
     leftHanded: true,
     favourite: false,
+    ...changes,
+  };
+}
+
+export function aTry(songId: string, voiceId: string | null, changes: Partial<Try> = {}): Try {
+  const measures = { sungShare: 1, offCents: 12.5, inTune: 0.9, fellShort: null, unsteady: null, ranOutOfLow: null };
+  return {
+    id: randomUUID(),
+    songId,
+    voiceId,
+    tonic: "Bb",
+    shift: -2,
+    tempo: 92,
+    backing: true,
+    sungAt: instant,
+    effort: 2,
+    measures: {
+      ...measures,
+      octaves: -1,
+      moved: 0,
+      tuningCents: -7.5,
+      phrases: [
+        {
+          ...measures,
+          fellShort: { midi: 71, semitones: 1.5, side: "above" },
+          phrase: 0,
+          label: "Nets in the loft",
+          lowMidi: 60,
+          highMidi: 71,
+          leftOut: false,
+          start: 0.4,
+          end: 4.25,
+          sentence: "Not up to B4, 1.5 semitones short.",
+        },
+      ],
+      pitches: [{ midi: 71, wantedS: 1.5, sungS: 1.2, offCents: 150, fellShort: "above" }],
+      summary: ["Most of it was in tune."],
+    },
     ...changes,
   };
 }

@@ -1,6 +1,6 @@
 import { randomUUID } from "node:crypto";
 import request from "supertest";
-import { aDecision, anInstrument, aSong, aTake, aVoice } from "./belongings";
+import { aDecision, anInstrument, aSong, aTake, aTry, aVoice } from "./belongings";
 import { Person, startTestServer, type TestServer } from "./testServer";
 
 let server: TestServer;
@@ -58,6 +58,15 @@ const collections: Collection[] = [
     change: { tonic: "C", way: null },
     spoil: { tonic: "H" },
     spoiled: "tonic",
+    byDefault: ["earlier"],
+  },
+  {
+    name: "tries",
+    make: () => aTry(songId, voiceId),
+    change: { effort: null, measures: null },
+    spoil: { effort: 0 },
+    spoiled: "effort",
+    byDefault: ["tempo"],
   },
   {
     name: "instruments",

@@ -92,6 +92,7 @@ it("makes its schemas from the contracts", async () => {
       "SongVersion",
       "SongVersionEntry",
       "Take",
+      "Try",
       "Voice",
     ].sort(),
   );

@@ -13,6 +13,7 @@ const names = [
   "KindOfTake1767225600000",
   "SongRevisions1769904000000",
   "SongVersions1772323200000",
+  "KeysPerVoice1775001600000",
 ];
 const applied = () => database.query("SELECT name FROM migrations ORDER BY id");
 const tables = async () => {
@@ -71,6 +72,19 @@ it("gives songs that were kept before they had revisions their first, and no tag
     { title_key: "slack water", search_text: "slack water\nlow tide", first_words: "Low tide", span: null },
   ]);
   expect(await database.query("SELECT changed_at = saved_at AS same FROM songs")).toEqual([{ same: true }]);
+});
+
+it("keeps decisions made when there was one for each song, for their voice and without a history", async () => {
+  await asItWasAfter("SongVersions1772323200000", () =>
+    database.query(`
+      WITH person AS (INSERT INTO users (email, password_hash) VALUES ('a@orlow-quay.example', 'none') RETURNING id),
+      song AS (INSERT INTO songs (id, user_id, title, chart, created_at) SELECT gen_random_uuid(), id, 'Slack Water', '', now() FROM person RETURNING id, user_id)
+      INSERT INTO decisions (id, user_id, song_id, tonic, shift, reason, decided_at)
+      SELECT gen_random_uuid(), user_id, id, 'C', -2, 'Sits well.', now() FROM song`),
+  );
+  expect(await database.query("SELECT tonic, shift, voice_id, earlier FROM decisions")).toEqual([
+    { tonic: "C", shift: -2, voice_id: null, earlier: [] },
+  ]);
 });
 
 it("can be taken back, one after the other", async () => {

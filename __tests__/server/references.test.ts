@@ -1,5 +1,5 @@
 import { randomUUID } from "node:crypto";
-import { aDecision, aSong, aTake, aVoice } from "./belongings";
+import { aDecision, aSong, aTake, aTry, aVoice } from "./belongings";
 import { Person, startTestServer, type TestServer } from "./testServer";
 
 let server: TestServer;
@@ -77,6 +77,63 @@ it("removes the decision about a song together with the song", async () => {
   await owner.get(`/api/decisions/${decision.id}`).expect(404);
 });
 
+it("refuses a try of somebody else's song or voice", async () => {
+  const song = await saved(owner, "songs", aSong());
+  const theirs = { song: await saved(stranger, "songs", aSong()), voice: await saved(stranger, "voices", aVoice()) };
+  expect(await refusal(owner, "tries", aTry(theirs.song.id, null))).toMatchObject(unknown("songId"));
+  expect(await refusal(owner, "tries", aTry(song.id, theirs.voice.id))).toMatchObject(unknown("voiceId"));
+});
+
+it("removes tries together with their song and with their voice", async () => {
+  const voice = await saved(owner, "voices", aVoice());
+  const [gone, stays] = [await saved(owner, "songs", aSong()), await saved(owner, "songs", aSong())];
+  const ofSong = await saved(owner, "tries", aTry(gone.id, null));
+  const ofVoice = await saved(owner, "tries", aTry(stays.id, voice.id));
+  const kept = await saved(owner, "tries", aTry(stays.id, null));
+  await owner.delete(`/api/songs/${gone.id}`).expect(204);
+  await owner.delete(`/api/voices/${voice.id}`).expect(204);
+  await owner.get(`/api/tries/${ofSong.id}`).expect(404);
+  await owner.get(`/api/tries/${ofVoice.id}`).expect(404);
+  await owner.get(`/api/tries/${kept.id}`).expect(200);
+});
+
+it("keeps a decision for each voice and one for whoever sings", async () => {
+  const song = await saved(owner, "songs", aSong());
+  const voices = [await saved(owner, "voices", aVoice()), await saved(owner, "voices", aVoice())];
+  for (const voiceId of [voices[0]!.id, voices[1]!.id, null]) {
+    const decision = await saved(owner, "decisions", aDecision(song.id, voiceId));
+    await owner.get(`/api/decisions/${decision.id}`).expect(200);
+  }
+  const of = async () =>
+    ((await owner.get("/api/decisions")).body as { songId: string; voiceId: string | null }[])
+      .filter(({ songId }) => songId === song.id)
+      .map(({ voiceId }) => voiceId);
+  expect(await of()).toEqual([voices[0]!.id, voices[1]!.id, null]);
+  await owner.delete(`/api/voices/${voices[0]!.id}`).expect(204);
+  expect(await of()).toEqual([voices[1]!.id, null]);
+});
+
+it("keeps what was decided before when another device decides without knowing of it", async () => {
+  const song = await saved(owner, "songs", aSong());
+  const first = await saved(owner, "decisions", aDecision(song.id, null));
+  const later = aDecision(song.id, null, { tonic: "C", decidedAt: "2026-11-25T08:00:00.000Z" });
+  const { id: _id, songId: _songId, voiceId: _voiceId, earlier: _earlier, ...choice } = first;
+  const saw = await owner.put(`/api/decisions/${later.id}`, later).expect(201);
+  expect(saw.body).toEqual({ ...later, earlier: [choice] });
+  const stale = { ...later, tonic: "D", decidedAt: "2026-11-26T08:00:00.000Z" };
+  const second = await owner.put(`/api/decisions/${later.id}`, stale).expect(200);
+  expect(second.body.earlier.map(({ tonic }: { tonic: string }) => tonic)).toEqual(["C", "Bb"]);
+});
+
+it("takes the newest choice back without keeping it", async () => {
+  const song = await saved(owner, "songs", aSong());
+  const first = await saved(owner, "decisions", aDecision(song.id, null));
+  const { id: _id, songId: _songId, voiceId: _voiceId, earlier: _earlier, ...choice } = first;
+  const next = { ...first, tonic: "C", decidedAt: "2026-11-25T08:00:00.000Z", earlier: [choice] };
+  await owner.put(`/api/decisions/${first.id}`, next).expect(200);
+  expect((await owner.put(`/api/decisions/${first.id}`, first).expect(200)).body).toEqual(first);
+});
+
 it("keeps one decision for each song: the newest", async () => {
   const song = await saved(owner, "songs", aSong());
   const first = await saved(owner, "decisions", aDecision(song.id, null));
@@ -95,14 +152,16 @@ it("leaves the old decision alone when the new one is refused", async () => {
 it("ends with one decision when two are made at once", async () => {
   const song = await saved(owner, "songs", aSong());
   const answers = await Promise.all(
-    Array.from({ length: 4 }, () => {
-      const decision = aDecision(song.id, null);
+    Array.from({ length: 4 }, (_, k) => {
+      const decision = aDecision(song.id, null, { decidedAt: `2026-11-24T19:20:0${k}.000Z` });
       return owner.put(`/api/decisions/${decision.id}`, decision);
     }),
   );
   for (const { status } of answers) expect([201, 409]).toContain(status);
-  const all = (await owner.get("/api/decisions")).body as { songId: string }[];
-  expect(all.filter(({ songId }) => songId === song.id)).toHaveLength(1);
+  const all = (await owner.get("/api/decisions")).body as { songId: string; earlier: object[] }[];
+  const left = all.filter(({ songId }) => songId === song.id);
+  expect(left).toHaveLength(1);
+  expect(left[0]?.earlier).toHaveLength(answers.filter(({ status }) => status === 201).length - 1);
 });
 
 it("refuses more items than an account may keep", async () => {

@@ -47,7 +47,12 @@ function wav(pcm: Float32Array, { code = 1, bits, channels = 1, rate, extensible
 const sixteen: Kind["put"] = (d, v, at) => d.writeInt16LE(Math.round(v * 32767), at);
 const kinds: Record<string, Kind> = {
   "8 bits": { bits: 8, rate: 16000, put: (d, v, at) => d.writeUInt8(Math.round(v * 127) + 128, at) },
-  "24 bits, stereo": { bits: 24, channels: 2, rate: 16000, put: (d, v, at) => d.writeIntLE(Math.round(v * 8388607), at, 3) },
+  "24 bits, stereo": {
+    bits: 24,
+    channels: 2,
+    rate: 16000,
+    put: (d, v, at) => d.writeIntLE(Math.round(v * 8388607), at, 3),
+  },
   "float, extensible": { code: 3, bits: 32, rate: 16000, extensible: true, put: (d, v, at) => d.writeFloatLE(v, at) },
   "five channels": { bits: 16, channels: 5, rate: 16000, put: sixteen },
   "8 kHz": { bits: 16, rate: 8000, put: sixteen },
@@ -55,7 +60,12 @@ const kinds: Record<string, Kind> = {
 };
 
 test.each(Object.entries(kinds))("%s: the same song has the same range", async (name, kind) => {
-  const { pcm } = singPhrase({ notes: [50, 54, 57, 62, 54].map((midi) => ({ midi, durationS: 0.5 })), seed: 3, consonants: 0, sampleRate: kind.rate });
+  const { pcm } = singPhrase({
+    notes: [50, 54, 57, 62, 54].map((midi) => ({ midi, durationS: 0.5 })),
+    seed: 3,
+    consonants: 0,
+    sampleRate: kind.rate,
+  });
   const file = join(folder, `${name}.wav`);
   writeFileSync(file, wav(pcm, kind));
   const [line] = (await linesOf(takeVerb, [file])) as { verdict: string; lowMidi: number; highMidi: number }[];
@@ -67,7 +77,11 @@ test.each(Object.entries(kinds))("%s: the same song has the same range", async (
 test.each([
   ["no samples at all", wav(new Float32Array(0), { bits: 16, rate: 16000, put: sixteen }), /holds no sound/],
   ["a rate of 4 kHz", wav(new Float32Array(4000), { bits: 16, rate: 4000, put: sixteen }), /4000 Hz/],
-  ["12 bits", wav(new Float32Array(4000), { bits: 16, rate: 16000, put: sixteen }).fill(12, 46, 47), /not supported|broken/],
+  [
+    "12 bits",
+    wav(new Float32Array(4000), { bits: 16, rate: 16000, put: sixteen }).fill(12, 46, 47),
+    /not supported|broken/,
+  ],
   ["over ten minutes", wavBytes(new Float32Array(8000 * 601), 8000), /longer than ten minutes/],
 ])("%s: one clear line", async (name, bytes, words) => {
   const file = join(folder, `${name}.wav`);
@@ -79,7 +93,11 @@ test.each([
 });
 
 test("samples that end in the middle of one, or after one, are read as far as they go", async () => {
-  const { pcm } = singPhrase({ notes: [50, 54, 57, 62, 54].map((midi) => ({ midi, durationS: 0.5 })), seed: 3, sampleRate: 16000 });
+  const { pcm } = singPhrase({
+    notes: [50, 54, 57, 62, 54].map((midi) => ({ midi, durationS: 0.5 })),
+    seed: 3,
+    sampleRate: 16000,
+  });
   const bytes = wavBytes(pcm, 16000);
   const [most, one] = [join(folder, "most.wav"), join(folder, "one.wav")];
   writeFileSync(most, bytes.subarray(0, bytes.length - 8001));
@@ -90,7 +108,11 @@ test("samples that end in the middle of one, or after one, are read as far as th
 });
 
 test("three minutes are heard at more than ten times the speed they were sung at", async () => {
-  const { pcm } = singPhrase({ notes: [50, 54, 57, 62, 54, 50].map((midi) => ({ midi, durationS: 0.6 })), seed: 3, sampleRate: 8000 });
+  const { pcm } = singPhrase({
+    notes: [50, 54, 57, 62, 54, 50].map((midi) => ({ midi, durationS: 0.6 })),
+    seed: 3,
+    sampleRate: 8000,
+  });
   const long = new Float32Array(8000 * 180);
   for (let at = 0; at + pcm.length <= long.length; at += pcm.length) long.set(pcm, at);
   const file = join(folder, "long.wav");

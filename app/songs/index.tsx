@@ -27,7 +27,7 @@ export default function SongsRoute() {
   }, [decisions]);
   const mineOf = useCallback(
     (song: SongListing): ShelfKey | null => {
-      const decision = decisionFor(bySong.get(song.id) ?? [], song.id);
+      const decision = decisionFor(bySong.get(song.id) ?? [], song.id, voice?.id ?? null);
       // A listing has no chart and no notes; key and home note are all that is asked for here.
       const tune = song.span && { kind: "span" as const, ...song.span };
       const inHand = decision && keyInHand({ ...song, chart: "", tune }, null, decision);

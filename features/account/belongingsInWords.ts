@@ -6,6 +6,7 @@ const words: Record<Collection, readonly [one: string, many: string]> = {
   takes: ["take", "takes"],
   songs: ["song", "songs"],
   decisions: ["chosen key", "chosen keys"],
+  tries: ["tried key", "tried keys"],
   instruments: ["instrument", "instruments"],
 };
 

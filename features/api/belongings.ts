@@ -4,7 +4,7 @@ import type { Collection, Items } from "./items";
 /** How many of each. */
 export type Counts = Record<Collection, number>;
 
-/** Everything this device keeps. `untouched` are the demonstration songs nobody changed and no decision refers to. */
+/** Everything this device keeps. `untouched` are the demonstration songs nobody changed, decided a key for or tried. */
 export interface Belongings {
   items: { [C in Collection]: Items[C][] };
   untouched: ReadonlySet<string>;
@@ -12,17 +12,18 @@ export interface Belongings {
 
 /** Reads the whole device shelf. */
 export async function readBelongings(): Promise<Belongings> {
-  const [voices, takes, songs, decisions, instruments] = await Promise.all([
+  const [voices, takes, songs, decisions, tries, instruments] = await Promise.all([
     deviceShelf.list("voices"),
     deviceShelf.list("takes"),
     deviceShelf.list("songs"),
     deviceShelf.list("decisions"),
+    deviceShelf.list("tries"),
     deviceShelf.list("instruments"),
   ]);
-  const decided = new Set(decisions.map((decision) => decision.songId));
+  const decided = new Set([...decisions, ...tries].map(({ songId }) => songId));
   const untouched = new Set<string>();
   for (const song of songs) if (!decided.has(song.id) && (await deviceShelf.isAsSeeded(song))) untouched.add(song.id);
-  return { items: { voices, takes, songs, decisions, instruments }, untouched };
+  return { items: { voices, takes, songs, decisions, tries, instruments }, untouched };
 }
 
 /** What the person did on this device, without the demonstration as it came. */
@@ -33,6 +34,7 @@ export async function countBelongings(): Promise<Counts> {
     takes: items.takes.length,
     songs: items.songs.length - untouched.size,
     decisions: items.decisions.length,
+    tries: items.tries.length,
     instruments: items.instruments.length,
   };
 }

@@ -1,4 +1,5 @@
 import type { SongVersion } from "@/shared/contract/songVersion";
+import { withHistory } from "@/shared/contract/decisionHistory";
 import { ApiError } from "./apiError";
 import { deviceHistory } from "./deviceHistory";
 import { indexedDbStorage, type DeviceItems, type DeviceStorage } from "./deviceStorage";
@@ -23,8 +24,10 @@ const unknownReference = (what: string) =>
   new ApiError(422, "unknown-reference", `The ${what} this belongs to is not on your shelf any more.`);
 
 /** An item as it is today, whenever it was kept. */
-const asToday = <C extends Collection>(name: C, kept: unknown) =>
-  (name === "songs" ? completeSong(kept) : kept) as Items[C];
+const asToday = <C extends Collection>(name: C, kept: unknown) => {
+  if (name === "songs") return completeSong(kept) as Items[C];
+  return (name === "decisions" ? { earlier: [], ...(kept as object) } : kept) as Items[C];
+};
 
 const listIn = async <C extends Collection>(items: Readable, name: C): Promise<Items[C][]> =>
   (await items.list(keyOf(name, ""))).map((kept) => asToday(name, kept));
@@ -41,8 +44,8 @@ const contentOf = (song: Items["songs"]) => ({
 async function checkReferences(items: Readable, name: Collection, item: Items[Collection]): Promise<void> {
   const has = async (parent: Collection, id: string) => (await items.get(keyOf(parent, id))) !== undefined;
   if (name === "takes" && !(await has("voices", (item as Items["takes"]).voiceId))) throw unknownReference("voice");
-  if (name !== "decisions") return;
-  const { songId, voiceId } = item as Items["decisions"];
+  if (name !== "decisions" && name !== "tries") return;
+  const { songId, voiceId } = item as Items["decisions" | "tries"];
   if (!(await has("songs", songId))) throw unknownReference("song");
   if (voiceId !== null && !(await has("voices", voiceId))) throw unknownReference("voice");
 }
@@ -72,18 +75,41 @@ function setSong(items: DeviceItems, song: Items["songs"]): Items["songs"] {
   return song;
 }
 
+/** One for each song and voice: it takes the place of others and keeps their history. */
+async function putDecision(items: DeviceItems, sent: Items["decisions"]): Promise<Items["decisions"]> {
+  const replaced = (await listIn(items, "decisions")).filter(
+    ({ songId, voiceId }) => songId === sent.songId && voiceId === sent.voiceId,
+  );
+  for (const { id } of replaced) items.delete(keyOf("decisions", id));
+  const decision = replaced.reduce(withHistory, sent);
+  items.set(keyOf("decisions", sent.id), decision);
+  return decision;
+}
+
 /** Takes an item and what goes with it away. */
 async function takeAway(items: DeviceItems, name: Collection, id: string): Promise<void> {
   items.delete(keyOf(name, id));
   if (name === "songs") {
     deviceHistory.forget(items, id);
-    for (const decision of await listIn(items, "decisions"))
-      if (decision.songId === id) items.delete(keyOf("decisions", decision.id));
+    for (const child of ["decisions", "tries"] as const)
+      for (const { id: childId, songId } of await listIn(items, child))
+        if (songId === id) items.delete(keyOf(child, childId));
   }
   if (name === "voices") {
-    for (const take of await listIn(items, "takes")) if (take.voiceId === id) items.delete(keyOf("takes", take.id));
-    for (const decision of await listIn(items, "decisions"))
-      if (decision.voiceId === id) items.set(keyOf("decisions", decision.id), { ...decision, voiceId: null });
+    for (const child of ["takes", "tries"] as const)
+      for (const { id: childId, voiceId } of await listIn(items, child))
+        if (voiceId === id) items.delete(keyOf(child, childId));
+    await freeDecisions(items, id);
+  }
+}
+
+/** Decisions of a voice that goes become everybody's, except where a song has one for everybody already. */
+async function freeDecisions(items: DeviceItems, voiceId: string): Promise<void> {
+  const decisions = await listIn(items, "decisions");
+  for (const decision of decisions.filter((each) => each.voiceId === voiceId)) {
+    const key = keyOf("decisions", decision.id);
+    if (decisions.some((each) => each.songId === decision.songId && each.voiceId === null)) items.delete(key);
+    else items.set(key, { ...decision, voiceId: null });
   }
 }
 
@@ -101,6 +127,7 @@ function createDeviceShelf(storage: DeviceStorage): DeviceShelf {
       storage.change(async (items) => {
         await checkReferences(items, name, item);
         if (name === "songs") return (await putSong(items, item as Items["songs"], version)) as Items[C];
+        if (name === "decisions") return (await putDecision(items, item as Items["decisions"])) as Items[C];
         items.set(keyOf(name, item.id), item);
         return item;
       }),

@@ -2,6 +2,7 @@ import type { Decision } from "@/shared/contract/decision";
 import type { OwnInstrument } from "@/shared/contract/instrument";
 import type { Song } from "@/shared/contract/song";
 import type { Take } from "@/shared/contract/take";
+import type { Try } from "@/shared/contract/try";
 import type { Voice } from "@/shared/contract/voice";
 
 /** The owned collections and what they hold. */
@@ -10,6 +11,7 @@ export interface Items {
   takes: Take;
   songs: Song;
   decisions: Decision;
+  tries: Try;
   instruments: OwnInstrument;
 }
 
@@ -21,6 +23,7 @@ export const collections = [
   "takes",
   "songs",
   "decisions",
+  "tries",
   "instruments",
 ] as const satisfies readonly Collection[];
 
@@ -40,6 +43,6 @@ export interface Shelf {
    * overwritten: 409 "changed-elsewhere".
    */
   put<C extends Collection>(name: C, item: Items[C], options?: PutOptions): Promise<Items[C]>;
-  /** Takes go with their voice, decisions with their song. Removing what is not there is no error. */
+  /** Takes and tries go with their voice, decisions and tries with their song. Removing what is not there is no error. */
   remove(name: Collection, id: string): Promise<void>;
 }

@@ -38,6 +38,7 @@ function titleOf(name: Collection, item: Items[Collection]): string {
   if ("title" in item) return item.title;
   if ("name" in item) return item.name;
   if (name === "takes") return `A take of ${(item as Items["takes"]).sungAt.slice(0, 10)}`;
+  if (name === "tries") return `A key tried on ${(item as Items["tries"]).sungAt.slice(0, 10)}`;
   return "The key you chose for a song";
 }
 
@@ -49,8 +50,8 @@ function reasonOf(error: ApiError): string {
 /** An item cannot arrive before what it refers to. */
 function parentsOf(name: Collection, item: Items[Collection]): string[] {
   if (name === "takes") return [(item as Items["takes"]).voiceId];
-  if (name !== "decisions") return [];
-  const { songId, voiceId } = item as Items["decisions"];
+  if (name !== "decisions" && name !== "tries") return [];
+  const { songId, voiceId } = item as Items["decisions" | "tries"];
   return voiceId === null ? [songId] : [songId, voiceId];
 }
 

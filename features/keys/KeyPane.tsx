@@ -23,7 +23,7 @@ export interface KeyPaneProps {
 
 /** The middle column of a wide song page. */
 export function KeyPane({ song, keys, singer, selected, onSelect }: KeyPaneProps) {
-  const { rows, voice, decision, noFit } = keys;
+  const { rows, voice, decision, removed, noFit } = keys;
   return (
     <View testID="key-pane">
       <View
@@ -75,7 +75,7 @@ export function KeyPane({ song, keys, singer, selected, onSelect }: KeyPaneProps
       ) : (
         <KeysMissing song={song} />
       )}
-      {decision && (
+      {(decision ?? removed) && (
         <View style={{ marginTop: 12 }}>
           <DecidedLine keys={keys} />
         </View>

@@ -13,7 +13,7 @@ import { decisionHistory, type DecisionHistory } from "./decision/decisionHistor
 import { decisionFor, decisionQueries, useRemoveDecision, useSaveDecision } from "./decision/decisionQueries";
 import { noFitWords, wholeVoice, type KeyRow } from "./keyRows";
 import { triesOfVoice, voiceAfter } from "./tryout/triedRows";
-import { tryQueries } from "./tryout/tryQueries";
+import { tryQueries, useSendWaiting } from "./tryout/tryQueries";
 import { keyInHand, keyRowsOf, songChords, writtenKeyOf, type KeyInHand } from "./songKeys";
 
 /** The keys of one song for one voice, with what was decided and the way to decide anew. */
@@ -60,6 +60,7 @@ export function useSongKeys(song: Song, { voice: singer, voices, forKeys }: Sing
   const save = useSaveDecision();
   const remove = useRemoveDecision();
   const tries = useQuery(tryQueries.all());
+  useSendWaiting((tries.data ?? []).some(({ waiting }) => waiting));
   const tried = useMemo(
     () => forKeys && voiceAfter(song, forKeys, triesOfVoice(tries.data ?? [], singer?.id ?? null)),
     [song, forKeys, tries.data, singer?.id],

@@ -3,10 +3,12 @@ import { DataSource, type DataSourceOptions } from "typeorm";
 import { UserEntity } from "../auth/user.entity";
 import { InstrumentEntity } from "../instruments/instrument.entity";
 import { DecisionEntity } from "../keys/decision.entity";
+import { TryEntity } from "../keys/try.entity";
 import { SongEntity } from "../songs/song.entity";
 import { TakeEntity } from "../voices/take.entity";
 import { VoiceEntity } from "../voices/voice.entity";
 import { FirstTables1764547200000 } from "./migrations/FirstTables1764547200000";
+import { KeysPerVoice1775001600000 } from "./migrations/KeysPerVoice1775001600000";
 import { KindOfTake1767225600000 } from "./migrations/KindOfTake1767225600000";
 import { SongRevisions1769904000000 } from "./migrations/SongRevisions1769904000000";
 import { SongVersions1772323200000 } from "./migrations/SongVersions1772323200000";
@@ -16,7 +18,7 @@ const common: Pick<
   "type" | "entities" | "synchronize" | "uuidExtension" | "installExtensions" | "invalidWhereValuesBehavior"
 > = {
   type: "postgres",
-  entities: [UserEntity, VoiceEntity, TakeEntity, SongEntity, DecisionEntity, InstrumentEntity],
+  entities: [UserEntity, VoiceEntity, TakeEntity, SongEntity, DecisionEntity, TryEntity, InstrumentEntity],
   synchronize: false,
   uuidExtension: "pgcrypto",
   installExtensions: false,
@@ -54,6 +56,7 @@ export function createMigrationSource(url: string): DataSource {
       KindOfTake1767225600000,
       SongRevisions1769904000000,
       SongVersions1772323200000,
+      KeysPerVoice1775001600000,
     ],
     migrationsTransactionMode: "all",
   });

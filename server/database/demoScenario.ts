@@ -170,6 +170,7 @@ function decide(song: Song, voice: Voice, takes: Take[], instrument: OwnInstrume
     instrument: instrument.id,
     way: way ? { retune: way.retune, capo: way.capo, shapeKey: way.shapeKey } : null,
     decidedAt: takes.at(-1)?.sungAt ?? voice.createdAt,
+    earlier: [],
   };
 }
 

@@ -21,6 +21,8 @@ interface Options<Item, Wishes> {
   noun: string;
   /** Runs before the item is written and gives what to write; null leaves what is kept as it is. */
   beforeSave?: (saving: Saving<Item, Wishes>) => Promise<Item | null>;
+  /** Runs before an item is removed, in the same transaction. */
+  beforeRemove?: (manager: EntityManager, userId: string, id: string) => Promise<void>;
   mostItems?: number;
 }
 
@@ -70,6 +72,7 @@ export class OwnedCollection<Item extends { id: string }, Row extends Item & Own
 
   async remove(userId: string, id: string): Promise<void> {
     await this.alone(userId, async (manager) => {
+      await this.options.beforeRemove?.(manager, userId, id);
       const { affected } = await manager
         .createQueryBuilder()
         .delete()

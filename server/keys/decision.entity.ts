@@ -30,4 +30,7 @@ export class DecisionEntity extends OwnedEntity implements Decision {
 
   @Column({ type: "timestamptz", name: "decided_at", transformer: isoInstant })
   decidedAt!: string;
+
+  @Column({ type: "jsonb" })
+  earlier!: Decision["earlier"];
 }

@@ -19,7 +19,7 @@ const songs = {
   schema: song,
   plural: "songs",
   noun: "song",
-  removes: "its versions and its decision",
+  removes: "its versions, decisions and tries",
   wishes: z.strictObject({
     version: z
       .enum(["0", "1"])

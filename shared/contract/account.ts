@@ -14,7 +14,11 @@ export const signInRequest = z.strictObject({ email, password: z.string().min(1,
 export type SignInRequest = z.infer<typeof signInRequest>;
 
 /** The signed-in person. */
-export const account = z.strictObject({ id: z.uuid(), email: z.string(), role: z.enum(["singer", "teacher", "admin"]) });
+export const account = z.strictObject({
+  id: z.uuid(),
+  email: z.string(),
+  role: z.enum(["singer", "teacher", "admin"]),
+});
 export type Account = z.infer<typeof account>;
 
 /** Answer to sign-up, sign-in and refresh: the short access token; the refresh token travels in a cookie. */

@@ -3,7 +3,15 @@ import { z } from "zod";
 const instrumentString = z.strictObject({
   note: z.string().regex(/^[A-G](#|b)?-?\d$/, "Name a string like A3 or F#4."),
   gaugeIn: z.number().positive().max(0.3).nullable(),
-  material: z.enum(["plain-steel", "nickel-wound", "phosphor-bronze", "brass-wound", "nylon", "fluorocarbon", "unknown"]),
+  material: z.enum([
+    "plain-steel",
+    "nickel-wound",
+    "phosphor-bronze",
+    "brass-wound",
+    "nylon",
+    "fluorocarbon",
+    "unknown",
+  ]),
   scaleMm: z.number().min(100).max(2000).exactOptional(),
   startsAtFret: z.int().min(1).max(12).exactOptional(),
 });

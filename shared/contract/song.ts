@@ -1,6 +1,8 @@
 import { z } from "zod";
 
-export const tonicName = z.string().regex(/^[A-G](#|b)?$/, "Name the key by a letter from A to G, with # or b if needed.");
+export const tonicName = z
+  .string()
+  .regex(/^[A-G](#|b)?$/, "Name the key by a letter from A to G, with # or b if needed.");
 const mode = z.enum(["major", "minor", "dorian", "phrygian", "lydian", "mixolydian", "locrian"]);
 
 const melodyNote = z.strictObject({

@@ -1,5 +1,5 @@
 import { decision as decisionContract } from "@/shared/contract/decision";
-import { decide, decidedOn, stillFits, type Choice } from "./decide";
+import { decide, decidedOn, stillFits, takenBack, wayWords, type Choice } from "./decide";
 
 const choice: Choice = {
   songId: "7f0b6f0e-6a51-4a8e-9a53-0a3d8f6f3f01",
@@ -16,7 +16,7 @@ const now = new Date("2026-03-05T12:30:00Z");
 
 test("a choice becomes a decision that the contract accepts", () => {
   const made = decide(choice, null, () => id, now);
-  expect(decisionContract.parse(made)).toEqual({ ...choice, id, decidedAt: "2026-03-05T12:30:00.000Z" });
+  expect(decisionContract.parse(made)).toEqual({ ...choice, id, decidedAt: "2026-03-05T12:30:00.000Z", earlier: [] });
 });
 
 test("a new choice takes the place of the one before", () => {
@@ -28,6 +28,35 @@ test("a new choice takes the place of the one before", () => {
     new Date("2026-03-06T19:30:00Z"),
   );
   expect(after).toMatchObject({ id, tonic: "Bb", shift: -4, way: null, decidedAt: "2026-03-06T19:30:00.000Z" });
+});
+
+test("what was decided before stays known, newest first, twenty at most", () => {
+  const keys = ["C", "D", "E", "F", "G"];
+  const last = Array.from({ length: 25 }).reduce<ReturnType<typeof decide> | null>(
+    (before, _, k) => decide({ ...choice, tonic: keys[k % 5]! }, before, () => id, new Date(Date.UTC(2026, 2, 1 + k))),
+    null,
+  );
+  expect(decisionContract.parse(last).earlier).toHaveLength(20);
+  expect(last?.earlier[0]).toMatchObject({ tonic: "F", decidedAt: "2026-03-24T00:00:00.000Z" });
+});
+
+test("taking back brings the choice before, and nothing where there was none", () => {
+  const first = decide(choice, null, () => id, now);
+  const second = decide({ ...choice, tonic: "Bb", way: null }, first, () => "never", new Date("2026-03-06T19:30:00Z"));
+  expect(takenBack(second)).toEqual(first);
+  expect(takenBack(first)).toBeNull();
+});
+
+test("a way in words", () => {
+  expect(wayWords(choice)).toBe("capo 3, chords in A");
+  expect(wayWords({ way: { retune: -2, capo: 0, shapeKey: "Bb" } })).toBe("strings down 2, no capo, chords in B♭");
+  expect(wayWords({ way: null })).toBeNull();
+});
+
+test("another voice's key is left alone", () => {
+  const before = decide(choice, null, () => id, now);
+  const other = decide({ ...choice, voiceId: id }, before, () => "new", now);
+  expect(other).toMatchObject({ id: "new", earlier: [] });
 });
 
 test("only what is kept of a way goes along, and a long reason is cut", () => {

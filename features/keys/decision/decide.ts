@@ -1,5 +1,7 @@
-import type { Decision } from "@/shared/contract/decision";
+import { type Decision, mostEarlier } from "@/shared/contract/decision";
+import { presentChoice } from "@/shared/contract/decisionHistory";
 import { tonicPitchClass, type KeyName } from "@/shared/music/keyName";
+import { glyphs } from "@/shared/music/pitch";
 import type { Way } from "@/shared/ways/way";
 
 /** What was chosen on the page. */
@@ -15,17 +17,36 @@ export interface Choice {
   way: Pick<Way, "retune" | "capo" | "shapeKey"> | null;
 }
 
-/** The decision that keeps a choice. One a song: it takes the place, and the id, of the one before. */
+/** The decision that keeps a choice. One a song and voice: it takes the place, and the id, of the one before. */
 export function decide(choice: Choice, before: Decision | null, newId: () => string, now: Date): Decision {
   const { way, reason, score, ...rest } = choice;
+  const same = before?.songId === choice.songId && before.voiceId === choice.voiceId ? before : null;
   return {
     ...rest,
-    id: before?.id ?? newId(),
+    id: same?.id ?? newId(),
     score: score === null ? null : Math.min(100, Math.max(0, score)),
     reason: reason.length > 300 ? `${reason.slice(0, 299)}…` : reason,
     way: way && { retune: way.retune, capo: way.capo, shapeKey: way.shapeKey },
     decidedAt: now.toISOString(),
+    earlier: same ? [presentChoice(same), ...same.earlier].slice(0, mostEarlier) : [],
   };
+}
+
+/** The decision as it was before its newest choice; null where there was none. */
+export function takenBack(decision: Decision): Decision | null {
+  const [before, ...earlier] = decision.earlier;
+  return before ? { ...decision, ...before, earlier } : null;
+}
+
+/** "capo 3, chords in A": how the strings were to be played; null where no way was kept. */
+export function wayWords({ way }: Pick<Decision, "way">): string | null {
+  if (!way) return null;
+  const parts = [
+    ...(way.retune === 0 ? [] : [`strings ${way.retune > 0 ? "up" : "down"} ${Math.abs(way.retune)}`]),
+    way.capo === 0 ? "no capo" : `capo ${way.capo}`,
+    `chords in ${glyphs(way.shapeKey)}`,
+  ];
+  return parts.join(", ");
 }
 
 /** A decision made for a chart whose key was changed since no longer says where to play it. */
@@ -41,7 +62,7 @@ export function decidedElsewhere(decision: Decision, voiceId: string | null): bo
 }
 
 /** When a key was chosen, in words. */
-export function decidedOn(decision: Decision): string {
+export function decidedOn(decision: Pick<Decision, "decidedAt">): string {
   const date = new Date(decision.decidedAt);
   return new Intl.DateTimeFormat("en-GB", { day: "numeric", month: "long", year: "numeric" }).format(date);
 }

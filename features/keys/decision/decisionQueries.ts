@@ -2,19 +2,26 @@ import { queryOptions, useMutation, useQueryClient } from "@tanstack/react-query
 import { shelf } from "@/features/api/shelf";
 import type { Decision } from "@/shared/contract/decision";
 
-/** Every "my key"; there is at most one for a song. */
+/** Every "my key"; there is at most one for a song and voice. */
 export const decisionQueries = {
   all: () => queryOptions({ queryKey: ["decisions"], queryFn: () => shelf.list("decisions") }),
 };
 
-/** The key decided for a song; where two devices each decided, the later one counts. */
-export function decisionFor(decisions: readonly Decision[], songId: string): Decision | null {
-  return decisions
-    .filter((decision) => decision.songId === songId)
-    .reduce<Decision | null>(
-      (latest, each) => (latest === null || each.decidedAt > latest.decidedAt ? each : latest),
-      null,
-    );
+const newestFirst = (a: Decision, b: Decision) => b.decidedAt.localeCompare(a.decidedAt);
+
+/**
+ * The key decided for a song: for this voice, else for whoever sings, else the newest for another voice, which holds
+ * for that voice only.
+ */
+export function decisionFor(decisions: readonly Decision[], songId: string, voiceId: string | null): Decision | null {
+  const ofSong = decisions.filter((decision) => decision.songId === songId).sort(newestFirst);
+  const made = (id: string | null) => ofSong.find((decision) => decision.voiceId === id);
+  return made(voiceId) ?? made(null) ?? ofSong[0] ?? null;
+}
+
+/** What was decided for the same song and other voices, newest first. */
+export function otherDecisions(decisions: readonly Decision[], shown: Decision): Decision[] {
+  return decisions.filter(({ id, songId }) => songId === shown.songId && id !== shown.id).sort(newestFirst);
 }
 
 export function useSaveDecision() {

@@ -38,7 +38,7 @@ export function useGroupKeys(song: Song, known: readonly KnownSinger[]): GroupKe
     const written = writtenKeyOf(song);
     return shared && written && groupKeys(shared, singers, written);
   }, [shared, singers, song]);
-  const decision = decisionFor(decisions.data ?? [], song.id);
+  const decision = decisionFor(decisions.data ?? [], song.id, null);
   return {
     keys,
     singers,

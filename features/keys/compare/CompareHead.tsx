@@ -23,7 +23,7 @@ export function CompareHead({ row, group, on, onSelect, onUnpin, mark }: Compare
   const [focused, setFocused] = useState(false);
   const parts = keySignParts(row.key);
   return (
-    <th scope="col" style={{ ...head, borderLeft: `4px solid ${on ? colors.plum : "transparent"}` }}>
+    <th scope="col" style={{ ...head, ...(on ? bar : null) }}>
       <label style={{ display: "block", cursor: "pointer", position: "relative", paddingRight: 28 }}>
         <input
           type="radio"
@@ -82,12 +82,15 @@ export function CompareHead({ row, group, on, onSelect, onUnpin, mark }: Compare
 
 const head: CSSProperties = {
   position: "relative",
-  padding: "6px 20px 10px 16px",
+  padding: "6px 20px 10px",
   verticalAlign: "top",
   textAlign: "left",
   fontWeight: 400,
   borderBottom: `1.5px solid ${colors.ink}`,
   boxSizing: "border-box",
+};
+const bar: CSSProperties = {
+  background: `linear-gradient(${colors.plum}, ${colors.plum}) left / 4px 100% no-repeat`,
 };
 const away: CSSProperties = {
   position: "absolute",

@@ -10,6 +10,8 @@ import { Skeleton } from "@/features/ui/Skeleton";
 import { sizes } from "@/features/ui/theme";
 import { useLayout } from "@/features/ui/useLayout";
 import type { Song } from "@/shared/contract/song";
+import type { SingingVoice, Tune } from "@/shared/keys/keyScore";
+import { partFacts } from "@/shared/keys/partFacts";
 import { glyphs } from "@/shared/music/pitch";
 import type { KeyRow } from "../keyRows";
 import { KeysMissing } from "../KeysMissing";
@@ -98,7 +100,7 @@ export function CompareScreen({ song, keys, pending, voice, rows, instrument, wa
       )}
       {pending ? (
         <Skeleton bars={[{ height: 72 }, { height: 390 }, { height: 120 }]} words="Scoring the keys" />
-      ) : !keys.rows || !keys.voice ? (
+      ) : !keys.rows || !keys.voice || !song.tune ? (
         <KeysMissing song={song} />
       ) : selected === null ? (
         <EmptyState
@@ -121,6 +123,7 @@ export function CompareScreen({ song, keys, pending, voice, rows, instrument, wa
             markOf={(row) => decidedWords(keys, row.shift)}
             chooser={keys.written ? instrument.chooser : null}
             wayOf={wayOf}
+            factsOf={factsOf(song.tune, keys.voice)}
             chordsOf={({ key }) =>
               keys.written ? chordsIn(keys.written.chords, keys.written.from, key).map(glyphs) : []
             }
@@ -129,4 +132,8 @@ export function CompareScreen({ song, keys, pending, voice, rows, instrument, wa
       )}
     </Screen>
   );
+}
+
+function factsOf(tune: Tune, voice: SingingVoice) {
+  return ({ judged }: KeyRow) => partFacts(tune, voice, judged);
 }

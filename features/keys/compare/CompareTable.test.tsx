@@ -1,6 +1,7 @@
 import { fireEvent, render, screen, within } from "@testing-library/react";
 import { aSong } from "@/__tests__/client/belongings";
-import { wholeVoice } from "../keyRows";
+import { partFacts } from "@/shared/keys/partFacts";
+import { wholeVoice, type KeyRow } from "../keyRows";
 import { keyRowsOf } from "../songKeys";
 import { CompareTable } from "./CompareTable";
 import { compareColumns, compareHeight, compareScale } from "./compareGeometry";
@@ -11,6 +12,8 @@ const song = aSong({ tune: { kind: "melody", notes, home: "D" } });
 const singing = { range: { lowMidi: 51, highMidi: 74 }, comfort: { lowMidi: 55, highMidi: 70 } };
 const rows = keyRowsOf(song, singing) ?? [];
 const [first, second, third] = [rows[0]!, rows[1]!, rows[11]!];
+
+const factsOf = (row: KeyRow) => partFacts(song.tune!, singing, row.judged);
 
 function show(chooser: string | null = "my guitar") {
   const heard: string[] = [];
@@ -26,6 +29,7 @@ function show(chooser: string | null = "my guitar") {
       markOf={(row) => (row === second ? "my key" : null)}
       chooser={chooser}
       wayOf={(row) => `way into ${row.sign}`}
+      factsOf={factsOf}
       chordsOf={(row) => row.chords}
     />,
   );
@@ -95,17 +99,23 @@ test("the answer to why not one higher names both keys", () => {
   expect(whyNotOneHigher(first, [first])).toBeNull();
 });
 
-test("each part is said in words that agree with the picture", () => {
-  const voice = wholeVoice(singing);
-  const inside = { ...first, marks: first.marks.map((mark) => ({ ...mark, zone: "comfort" as const })) };
-  expect(partInWords("comfort", inside, voice)).toBe("all of the time in your comfort band");
-  const room = (semitones: number) => ({ ...first, above: { ...first.above, semitones } });
-  expect(partInWords("roomAbove", room(5), voice)).toBe("five semitones to the top of your range");
-  expect(partInWords("roomAbove", room(0), voice)).toBe("the top note is your last");
-  expect(partInWords("roomAbove", room(-1), voice)).toBe("a semitone past the top of your range");
-  const low = { ...first, marks: [{ midi: 60, share: 1, zone: "comfort" as const, home: true }] };
-  expect(partInWords("longHigh", low, voice)).toBe("no long notes near the top edge");
-  expect(partInWords("lowCarry", low, voice)).toBe("no low notes near the bottom edge");
+test("each part is said in words that hold its figures", () => {
+  const facts = factsOf(first);
+  const said = (part: keyof typeof facts, change: object = {}) =>
+    partInWords(part, { ...facts, [part]: { ...facts[part], ...change } }, "flats");
+  expect(said("comfort", { inside: 1 })).toBe("all of the time in your comfort band");
+  expect(said("comfort", { inside: 0.934 })).toBe("93 % of the time in your comfort band");
+  expect(said("roomAbove", { semitones: 5 })).toBe("five semitones to the top of your range");
+  expect(said("roomAbove", { semitones: 0 })).toBe("the top note is your last");
+  expect(said("roomBelow", { semitones: -1 })).toBe("a semitone past the bottom of your range");
+  expect(said("longHigh", { share: 0 })).toBe("nothing as high as A♭4");
+  expect(said("longHigh", { share: 0.2, longShare: 0.004 })).toBe(
+    "20 % of the time on A♭4 or higher, under 1 % in long notes",
+  );
+  expect(said("longHigh", { share: 0.2, longShare: 0 })).toBe("20 % of the time on A♭4 or higher, no long notes");
+  expect(said("longHigh", { share: 0.2, longShare: null })).toBe("20 % of the time on A♭4 or higher");
+  expect(said("lowCarry", { share: 0 })).toBe("nothing as low as A3");
+  expect(said("lowCarry", { share: 0.5 })).toBe("50 % of the time on A3 or lower");
 });
 
 test("the title counts", () => {

@@ -3,7 +3,8 @@ import { setSigns } from "@/features/ui/textSigns";
 import { colors, fonts } from "@/features/ui/theme";
 import { unseen } from "@/features/ui/unseen";
 import type { SingingVoice } from "@/shared/keys/keyScore";
-import type { KeyRow } from "../keyRows";
+import type { PartFacts } from "@/shared/keys/partFacts";
+import { spellingIn, type KeyRow } from "../keyRows";
 import { partNames } from "../partWords";
 import { CompareHead } from "./CompareHead";
 import { CompareLead, CompareSpan } from "./CompareSpan";
@@ -28,6 +29,8 @@ export interface CompareTableProps {
   chooser: ReactNode | null;
   /** the best way into a key with its grids */
   wayOf: (row: KeyRow) => ReactNode;
+  /** what each part of a key's score has measured */
+  factsOf: (row: KeyRow) => PartFacts;
   /** all chords of the song in a key, with glyphs */
   chordsOf: (row: KeyRow) => readonly string[];
 }
@@ -44,6 +47,7 @@ export function CompareTable({
   markOf,
   chooser,
   wayOf,
+  factsOf,
   chordsOf,
 }: CompareTableProps) {
   const group = useId();
@@ -62,8 +66,8 @@ export function CompareTable({
       style={{
         overflowX: scrolls ? "auto" : "visible",
         position: "relative",
-        margin: scrolls ? "0 -16px" : 0,
-        padding: scrolls ? "0 16px" : 0,
+        // Scrolled past, a key must not show at the left of the names.
+        marginRight: scrolls ? -16 : 0,
       }}
       {...(scrolls ? { tabIndex: 0, role: "region", "aria-label": "Keys side by side, scrolls sideways" } : null)}
     >
@@ -126,7 +130,7 @@ export function CompareTable({
                     part={part}
                     points={row.parts[part]}
                     width={each - 40}
-                    words={partInWords(part, row, voice)}
+                    words={partInWords(part, factsOf(row), spellingIn(row.key))}
                   />
                 ),
                 index === 0 ? { paddingTop: 10 } : {},

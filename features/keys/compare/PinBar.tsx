@@ -91,5 +91,5 @@ export function CompareLink({ songId, pinning: { rows }, kind }: PinBarProps & {
 function pinnedWords({ rows, room }: Pinning): string {
   const signs = rows.map(({ sign }) => sign).join(", ");
   if (rows.length === 1) return `Pinned: ${signs}. Pin another one to compare.`;
-  return `Pinned: ${signs}.${room ? "" : " Four is the most."}`;
+  return room ? `Pinned: ${signs}.` : `${signs}. Four is the most.`;
 }

@@ -1,7 +1,9 @@
-import { partMaxima } from "@/shared/keys/keyParts";
-import type { KeyParts, SingingVoice } from "@/shared/keys/keyScore";
+import { percent } from "@/shared/keys/keyReason";
+import type { KeyParts } from "@/shared/keys/keyScore";
+import type { PartFacts } from "@/shared/keys/partFacts";
 import { whyNotHigher } from "@/shared/keys/whyNotHigher";
 import { distanceWords } from "@/shared/music/moveWords";
+import { glyphs, noteName, type Spelling } from "@/shared/music/pitch";
 import type { KeyRow } from "../keyRows";
 
 const numbers = ["No", "One", "Two", "Three", "Four"];
@@ -18,20 +20,31 @@ export function whyNotOneHigher(row: KeyRow, rows: readonly KeyRow[]): string | 
 }
 
 /** A part of a score in words: what was measured, not how many points that gives. */
-export function partInWords(part: keyof KeyParts, row: KeyRow, voice: SingingVoice): string {
+export function partInWords(part: keyof KeyParts, facts: PartFacts, spelling: Spelling): string {
+  const name = (midi: number) => glyphs(noteName(midi, spelling));
   if (part === "comfort") {
-    const share = row.marks.reduce((sum, mark) => sum + (mark.zone === "comfort" ? mark.share : 0), 0);
-    const percent = Math.round(share * 100);
-    return percent === 100 ? "all of the time in your comfort band" : `${percent} % of the time in your comfort band`;
+    const { inside } = facts.comfort;
+    return inside > 0.999
+      ? "all of the time in your comfort band"
+      : `${percent(inside)} of the time in your comfort band`;
   }
-  if (part === "roomAbove") return roomWords(row.above.semitones, "top");
-  if (part === "roomBelow") return roomWords(row.below.semitones, "bottom");
-  const lost = 1 - row.parts[part] / partMaxima[part];
-  const edge = part === "longHigh" ? voice.comfort.highMidi - 2 : voice.comfort.lowMidi + 2;
-  const near = row.marks.some(({ midi }) => (part === "longHigh" ? midi >= edge : midi <= edge));
-  const what = part === "longHigh" ? "long notes near the top edge" : "low notes near the bottom edge";
-  if (!near || lost < 0.05) return `no ${what}`;
-  return `${lost > 0.5 ? "much of the time on" : lost > 0.2 ? "some" : "few"} ${what}`;
+  if (part === "roomAbove") return roomWords(facts.roomAbove.semitones, "top");
+  if (part === "roomBelow") return roomWords(facts.roomBelow.semitones, "bottom");
+  if (part === "lowCarry") {
+    const { share, toMidi } = facts.lowCarry;
+    return share === 0
+      ? `nothing as low as ${name(toMidi)}`
+      : `${percent(share)} of the time on ${name(toMidi)} or lower`;
+  }
+  const { share, longShare, fromMidi } = facts.longHigh;
+  if (share === 0) return `nothing as high as ${name(fromMidi)}`;
+  const long =
+    longShare === null
+      ? ""
+      : longShare === 0
+        ? ", no long notes"
+        : `, ${percent(longShare).toLowerCase()} in long notes`;
+  return `${percent(share)} of the time on ${name(fromMidi)} or higher${long}`;
 }
 
 function roomWords(semitones: number, end: "top" | "bottom"): string {

@@ -93,10 +93,10 @@ export function KeyDeck({ rows, voice, selected, onSelect, pinning }: KeyDeckPro
           >
             {Math.abs(index - at) > 2 ? (
               <Card style={{ flexGrow: 1 }}>{null}</Card>
-            ) : row === selected ? (
-              <KeyCard row={row} voice={voice} />
+            ) : row === selected || roomy ? (
+              <KeyCard row={row} voice={voice} selected={row === selected} />
             ) : (
-              <PeekCard row={row} voice={voice} side={index < at ? "right" : "left"} roomy={roomy} />
+              <PeekCard row={row} voice={voice} side={index < at ? "right" : "left"} />
             )}
           </div>
         ))}
@@ -152,9 +152,13 @@ function placesOf(box: HTMLDivElement, cards: readonly (HTMLDivElement | null)[]
 }
 
 /** One key in full: score, its reason, the span, and the five parts. */
-function KeyCard({ row, voice }: { row: KeyRow; voice: SingingVoice }) {
+function KeyCard({ row, voice, selected }: { row: KeyRow; voice: SingingVoice; selected: boolean }) {
   return (
-    <Card selected testID="key-card" style={{ flexGrow: 1, padding: 14 }}>
+    <Card
+      selected={selected}
+      testID={selected ? "key-card" : "next-card"}
+      style={{ flexGrow: 1, padding: selected ? 14 : 15 }}
+    >
       <View style={{ flexDirection: "row", justifyContent: "space-between", alignItems: "flex-end" }}>
         <KeySign of={row.key} size={52} />
         <Text variant="small" tone="soft">

@@ -78,17 +78,20 @@ export function MoveByHand({ rows, voice, selected, onSelect }: MoveByHandProps)
           <View style={{ flexDirection: "row" }}>
             <KeyPartBars parts={row.parts} />
           </View>
-          <Button
-            kind="secondary"
-            small
-            disabled={row === selected}
-            label={row === selected ? `${row.sign} is looked at` : `Look at ${row.sign}`}
-            onPress={() => {
-              onSelect(row);
-              setMoved(null);
-            }}
-            testID="look-at-moved"
-          />
+          <View style={{ minHeight: 48 }}>
+            {row !== selected && (
+              <Button
+                kind="secondary"
+                small
+                label={`Look at ${row.sign}`}
+                onPress={() => {
+                  onSelect(row);
+                  setMoved(null);
+                }}
+                testID="look-at-moved"
+              />
+            )}
+          </View>
         </View>
       </View>
     </View>

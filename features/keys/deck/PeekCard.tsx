@@ -17,15 +17,13 @@ export interface PeekCardProps {
   row: KeyRow;
   voice: SingingVoice;
   side: "left" | "right";
-  /** more of it shows than an edge */
-  roomy: boolean;
 }
 
 /** A neighbour of the card in the middle: only the edge that shows, its marks at the heights they have on the full card. */
-export function PeekCard({ row, voice, side, roomy }: PeekCardProps) {
-  const width = roomy ? 96 : 30;
+export function PeekCard({ row, voice, side }: PeekCardProps) {
+  const width = 30;
   // Behind the last card in sight more of the next one shows than between two.
-  const drawn = !roomy && side === "left" ? 64 : width;
+  const drawn = side === "left" ? 64 : width;
   const id = useDrawingId();
   const scale = ladderScale(voice, row.marks, 0);
   const y = (midi: number) => yOf(midi, scale, step, pad);
@@ -35,7 +33,7 @@ export function PeekCard({ row, voice, side, roomy }: PeekCardProps) {
       style={{ flexGrow: 1, padding: 0, alignItems: side === "left" ? "flex-start" : "flex-end", overflow: "hidden" }}
     >
       <View style={{ width, alignItems: "center", paddingTop: 18, height: 141 }}>
-        <KeySign of={row.key} size={row.key.mode === "minor" && row.sign.length > 2 ? 15 : 20} stacked={!roomy} />
+        <KeySign of={row.key} size={row.key.mode === "minor" && row.sign.length > 2 ? 15 : 20} stacked />
         <Text variant="mono" tone="soft" style={{ fontSize: 12, lineHeight: 18 }}>
           {row.score}
         </Text>
@@ -54,7 +52,7 @@ export function PeekCard({ row, voice, side, roomy }: PeekCardProps) {
           />
         ))}
         {row.marks.map((mark) => {
-          const long = Math.min(roomy ? 76 : 60, Math.max(8, mark.share * 400));
+          const long = Math.min(60, Math.max(8, mark.share * 400));
           const box = {
             x: side === "left" ? 10 : width - 10 - long,
             y: y(mark.midi) - 4,

@@ -23,6 +23,8 @@ import { songWords } from "./songWords";
 import type { FoundWays } from "./table/tableWays";
 import { WideKeys } from "./table/WideKeys";
 import { TogetherLink } from "./together/TogetherLink";
+import { TriedLine } from "./tryout/TriedLine";
+import { TryLink } from "./tryout/TryLink";
 import { decidedHere, decidedWords, type SongKeys } from "./useSongKeys";
 
 export interface KeysScreenProps {
@@ -68,6 +70,7 @@ export function KeysScreen({ song, keys, pending, voice, waysOf, instrument }: K
   const actions = selected && (
     <>
       {wide && <CompareLink songId={song.id} pinning={pinning} kind="secondary" />}
+      <TryLink songId={song.id} of={selected.key} shift={selected.shift} />
       <LinkButton kind="secondary" small href={pageOf(selected)} label={`Ways to play ${selected.sign}`} />
       <Button
         small
@@ -100,6 +103,7 @@ export function KeysScreen({ song, keys, pending, voice, waysOf, instrument }: K
       ) : (
         <>
           <ReachLine voice={keys.voice} voiceId={voice?.id ?? null} />
+          <TriedLine songId={song.id} tried={keys.tried} />
           {keys.noFit !== null && (
             <View style={{ marginBottom: 10 }}>
               <Notice kind="caution" testID="no-key-fits">
@@ -134,9 +138,10 @@ export function KeysScreen({ song, keys, pending, voice, waysOf, instrument }: K
                     isMine ? router.push(pageOf(selected)) : take(selected, () => router.push(pageOf(selected)))
                   }
                   testID="take-key"
-                  style={{ marginTop: 4 }}
+                  style={{ marginTop: 4, marginBottom: 8 }}
                 />
               )}
+              {phone && <TryLink songId={song.id} of={selected.key} shift={selected.shift} />}
               <KeyList
                 rows={rows}
                 voice={keys.voice}

@@ -8,7 +8,7 @@ import type { Song } from "@/shared/contract/song";
 import type { KeyRow } from "../keyRows";
 import { effortWords } from "./effortWords";
 import type { KnownTry } from "./tryQueries";
-import { measureWords } from "./measureWords";
+import { measureWords, wholeMeasures } from "./measureWords";
 import { spellingIn } from "../keyRows";
 import type { RankMove } from "./rankMoves";
 
@@ -31,7 +31,13 @@ export function SideBySide({ song, tries, moves, decided, saving, onDecide }: Si
   const columns = tries.flatMap((tried) => {
     const move = moves.find(({ row }) => row.shift === tried.shift);
     return move
-      ? [{ tried, move, words: tried.measures && measureWords(tried.measures, spellingIn(move.row.key)) }]
+      ? [
+          {
+            tried,
+            move,
+            words: tried.measures && measureWords(wholeMeasures(tried.measures), spellingIn(move.row.key)),
+          },
+        ]
       : [];
   });
   if (columns.length === 0) return null;

@@ -7,6 +7,7 @@ import { Screen } from "@/features/ui/Screen";
 import type { Crumb } from "@/features/ui/ScreenHead";
 import { Text } from "@/features/ui/Text";
 import { useLayout } from "@/features/ui/useLayout";
+import type { KeyRow } from "../keyRows";
 import { ComfortChange } from "./ComfortChange";
 import { rankMoves } from "./rankMoves";
 import { RankNow } from "./RankNow";
@@ -38,13 +39,31 @@ export function TryKept(props: TryKeptProps) {
   const now = rowsWith(song, voice, own);
   const tried = new Set(own.flatMap(({ songId, shift }) => (songId === song.id ? [shift] : [])));
   const next = (now?.rows ?? []).filter(({ shift, beyond }) => !tried.has(shift) && !beyond).slice(0, nextKeys);
+  const [first] = next;
+  const goTo = (row: KeyRow) => {
+    onKey({ tonic: row.key.tonic, shift: row.shift });
+    onOn();
+  };
   return (
     <Screen
       title={`${sign} is tried`}
       subtitle={song.title}
       crumb={crumb}
       wide
-      footer={<Button icon="mic" label={`Sing it in ${sign} again`} kind="secondary" onPress={onOn} testID="try-on" />}
+      footer={
+        <View style={{ flexDirection: "row", flexWrap: "wrap", gap: 10 }}>
+          <Button kind="secondary" icon="again" label={`${sign} again`} onPress={onOn} testID="try-on" />
+          {first && (
+            <Button
+              icon="mic"
+              label={`Try ${first.sign} next`}
+              onPress={() => goTo(first)}
+              style={{ flexGrow: 1 }}
+              testID="try-next"
+            />
+          )}
+        </View>
+      }
     >
       <View style={{ gap: 20 }}>
         {remove.error && (
@@ -61,7 +80,7 @@ export function TryKept(props: TryKeptProps) {
                 moves={rankMoves(before.rows, now.rows)}
                 shift={kept.shift}
                 sign={sign}
-                why={now.why}
+                why={now.why.filter((sentence) => !before.why.includes(sentence))}
                 waiting={kept.waiting}
                 undoing={remove.isPending}
                 onUndo={() => remove.mutate(kept)}
@@ -90,10 +109,7 @@ export function TryKept(props: TryKeptProps) {
                   small
                   label={`${row.sign}, ${row.score}`}
                   accessibleName={`${row.sign}, ${row.score}: try it`}
-                  onPress={() => {
-                    onKey({ tonic: row.key.tonic, shift: row.shift });
-                    onOn();
-                  }}
+                  onPress={() => goTo(row)}
                   testID={`try-next-${row.key.tonic}`}
                 />
               ))}

@@ -6,6 +6,7 @@ import { Heading } from "@/features/ui/Heading";
 import { Notice } from "@/features/ui/Notice";
 import { Text } from "@/features/ui/Text";
 import { MeasureList } from "./MeasureList";
+import { wholeMeasures } from "./measureWords";
 import { PhraseRow } from "./PhraseRow";
 import { sungPicture } from "./sungPicture";
 import type { TryRecorder } from "./tryRecorder";
@@ -40,7 +41,7 @@ export function TryReport({ measured, spelling, playback }: TryReportProps) {
               {sentence}
             </Text>
           ))}
-          <MeasureList measures={measures} spelling={spelling} />
+          <MeasureList measures={wholeMeasures(measures)} spelling={spelling} />
           {wishes.backing && !wishes.headphones && (
             <Text variant="small" tone="soft">
               Sung without headphones: the backing may stand in the recording, so these figures are coarse.

@@ -1,4 +1,4 @@
-import type { Measures } from "@/shared/keys/takeMeasures";
+import type { Measures, TakeMeasures } from "@/shared/keys/takeMeasures";
 import { glyphs, noteName } from "@/shared/music/pitch";
 
 /** One measured thing in words and a number. */
@@ -12,6 +12,12 @@ export interface MeasureWord {
 const unsteadyFrom = 1.8;
 export const UNKNOWN = "not to be told";
 const unknown = { text: UNKNOWN, tone: "soft" } as const;
+
+/** The measures of a whole take, as steady as its least steady phrase. */
+export function wholeMeasures<Take extends Measures & Pick<TakeMeasures, "phrases">>(take: Take): Take {
+  const told = take.phrases.flatMap(({ unsteady }) => (unsteady === null ? [] : [unsteady]));
+  return { ...take, unsteady: told.length > 0 ? Math.max(...told) : null };
+}
 
 /** What was measured, thing by thing; notes are spelled as the key wants it. */
 export function measureWords(measures: Measures, spelling: "sharps" | "flats"): MeasureWord[] {

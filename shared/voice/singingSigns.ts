@@ -50,11 +50,10 @@ const PURE_BELOW_DB = -24;
 const PURE_SHARE = 0.75;
 /**
  * Of the notes of a plucked or struck instrument (FluidR3: piano, guitars, vibraphone) 0.7 to 1 fade by more than this and
- * begin at their loudest, of a singer's at most 0.6; strings and bars waver by up to 4 cents, about as little as the steadiest of singers.
+ * begin at their loudest, and their pitch flutters no more than a machine's. Notes of sampled voices fade as much, but flutter.
  */
 const FADE_DB_PER_S = 3;
 const FADING_SHARE = 0.7;
-const STRUCK_CENTS = 4.5;
 const LEAST_FADE_S = 0.2;
 const LEAST_STRUCK = 3;
 /** A second harmonic this far over the first is a whistle above the search limit, followed an octave too low. */
@@ -95,10 +94,10 @@ function isStill(frames: readonly TrackFrame[], clear: readonly HeardNote[], hol
   return drifting < STILL_HOLD_DRIFT_CENTS / 2 || (drifting < STILL_HOLD_DRIFT_CENTS && wavering < STILL_HOLD_CENTS);
 }
 
-/** Nobody begins three notes of four at their loudest, lets them die away, and holds them like a string. */
+/** Nobody begins nearly every note at its loudest, lets it die away, and holds it like a string. */
 function isStruck(frames: readonly TrackFrame[], clear: readonly HeardNote[]): boolean {
   const measured = clear.filter((n) => n.end - n.start >= LEAST_FADE_S);
-  if (measured.length < LEAST_STRUCK || median(clear.map((n) => n.steadinessCents)) >= STRUCK_CENTS) return false;
+  if (measured.length < LEAST_STRUCK || flutter(frames, clear) >= FLUTTER_CENTS) return false;
   const fading = measured.filter((n) => fades(frames.slice(Math.round(n.start * 100) + 3, Math.round(n.end * 100) - 5).map((f) => f.levelDb)));
   return fading.length >= FADING_SHARE * measured.length;
 }

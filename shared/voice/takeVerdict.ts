@@ -14,7 +14,10 @@ const LEAST_PITCHES = 3;
 const SUNG_LONG_S = 0.6;
 const QUIET_DB = -60;
 const FAINT_DB = -42;
-/** Of some 800 lines by one singer, in rooms and through small microphones, one came to 0.2; loose duets come to 0.01 to 0.4. */
+/**
+ * Of 140 lines by one singer, in rooms, with a guitar underneath and through small microphones, the most was 0.15; of 15 duets
+ * of two unrelated lines all but two come to 0.22 to 0.5. Voices in unison or in octaves are one to it.
+ */
 const MIXED_AT_MOST = 0.2;
 const VOICED_AT_LEAST = 0.4;
 const CLIPPED_BEYOND_USE = 0.05;

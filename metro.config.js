@@ -15,7 +15,7 @@ config.resolver.resolveRequest = (context, name, platform) =>
 
 // Metro moves modules that a worker shares with a page into the page's chunk, where the worker cannot reach them.
 const workers = {
-  "/worklets/takeWorker.js": "features/voice/recorder/takeWorker.ts",
+  "/worklets/takeWorker.js": "features/voice/recorder/worker/takeWorker.ts",
   "/worklets/guidedWorker.js": "features/voice/guided/hearing/guidedWorker.ts",
   "/worklets/songFileWorker.js": "features/songs/files/songFileWorker.ts",
 };

@@ -1,5 +1,5 @@
 import { song as songContract } from "@/shared/contract/song";
-import { draftErrors, draftOf, emptyDraft, moveToHome, newOrigin, songFromDraft, type SongDraft } from "./songDraft";
+import { draftErrors, draftOf, emptyDraft, newOrigin, songFromDraft, type SongDraft } from "./songDraft";
 
 const origin = newOrigin("7f0b6f0e-6a51-4a8e-9a53-0a3d8f6f3f01", "2026-03-05T19:00:00.000Z");
 const typed: SongDraft = {
@@ -34,16 +34,6 @@ test("a tune with another home note is moved to the chart's key by the shorter w
   const notes = [{ start: 0, duration: 1, midi: 67 }];
   const song = songFromDraft({ ...typed, tune: "melody", home: "G", melody: { source: "a.abc", notes } }, inD, origin);
   expect(song.tune).toEqual({ kind: "melody", home: "D", notes: [{ start: 0, duration: 1, midi: 62 }] });
-});
-
-test.each([
-  ["D", "D", 0],
-  ["G", "D", -5],
-  ["D", "G", 5],
-  ["C", "Bb", -2],
-  ["C", "F#", -6],
-])("from home %s to home %s moves by %i", (from, to, semitones) => {
-  expect(moveToHome(from, to)).toBe(semitones);
 });
 
 test("a song opened for change and kept unchanged stays the same", () => {

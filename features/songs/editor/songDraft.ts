@@ -2,6 +2,7 @@ import type { Song } from "@/shared/contract/song";
 import { tonicPitchClass, type KeyName } from "@/shared/music/keyName";
 import { glyphs, noteName, parseNoteName } from "@/shared/music/pitch";
 import type { MelodyNote } from "@/shared/songs/melody";
+import { moveToHomeNote } from "@/shared/songs/sungMelody";
 
 /** A tune read from a file, as the form keeps it. */
 export interface DraftMelody {
@@ -71,11 +72,6 @@ function spellingOf(tonic: string): "sharps" | "flats" {
   return tonic.includes("b") || tonic === "F" ? "flats" : "sharps";
 }
 
-/** Semitones that bring a tune with one home note to another by the shorter way: -6 to 5. */
-export function moveToHome(from: string, to: string): number {
-  return ((tonicPitchClass(to) - tonicPitchClass(from) + 18) % 12) - 6;
-}
-
 /** What the form says is wrong, field by field; an empty object when the song can be kept. */
 export function draftErrors(draft: SongDraft, found: KeyName | null): DraftErrors {
   const errors: DraftErrors = {};
@@ -127,7 +123,7 @@ function tuneFromDraft(draft: SongDraft, key: KeyName | null): Song["tune"] {
   const given = draft.home || key?.tonic;
   if (draft.tune === "none" || given === undefined) return null;
   const home = key?.tonic ?? given;
-  const move = moveToHome(given, home);
+  const move = moveToHomeNote(tonicPitchClass(given), tonicPitchClass(home));
   if (draft.tune === "melody")
     return {
       kind: "melody",

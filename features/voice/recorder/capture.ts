@@ -1,9 +1,9 @@
 import { newId } from "@/features/api/newId";
 import { createEar } from "./ear";
 import { hear, silence, type LiveSound } from "./liveSound";
-import { openTakeWorker } from "./openTakeWorker";
+import { openTakeWorker } from "./worker/openTakeWorker";
 import type { HeardTake, RecorderEvent } from "./recorder";
-import { FileRefused, readSoundFile } from "./soundFile";
+import { FileRefused, readSoundFile } from "./sound/soundFile";
 import type { FromTakeWorker, TakePart, ToTakeWorker } from "./takeProtocol";
 import { beginUnkept, markTakeOfThisTab, type CutOffTake } from "./unkeptTake";
 

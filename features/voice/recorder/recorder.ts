@@ -1,5 +1,5 @@
 import type { TakeReport, Verdict } from "@/shared/voice/takeReport";
-import type { Refusal, SoundKind } from "./soundFile";
+import type { Refusal, SoundKind } from "./sound/soundFile";
 import { longestTakeS, type TakePart } from "./takeProtocol";
 
 /** Why there is no microphone to listen to. */

@@ -1,6 +1,6 @@
 import { useCallback, useEffect, useRef, useState } from "react";
 import type { TakePart } from "./takeProtocol";
-import { takeSound } from "./takeSound";
+import { takeSound } from "./sound/takeSound";
 
 export interface Playback {
   playing: boolean;

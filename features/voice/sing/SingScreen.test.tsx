@@ -20,7 +20,7 @@ jest.mock("expo-router", () => ({
     </a>
   ),
 }));
-jest.mock("../recorder/openTakeWorker", () => ({ openTakeWorker: () => mockWorker }));
+jest.mock("../recorder/worker/openTakeWorker", () => ({ openTakeWorker: () => mockWorker }));
 jest.mock("../recorder/microphone", () => ({
   ...jest.requireActual<object>("../recorder/microphone"),
   openMicrophone: jest.fn(),

@@ -1,5 +1,5 @@
 import type { Failure, FailureKind, Interruption, StoppedBy } from "../recorder/recorder";
-import type { Refusal, SoundKind } from "../recorder/soundFile";
+import type { Refusal, SoundKind } from "../recorder/sound/soundFile";
 
 export interface FailureWords {
   title: string;

@@ -1,6 +1,6 @@
 import type { TakeReport } from "@/shared/voice/takeReport";
 import { createTakeListener } from "./takeListener";
-import type { FromTakeWorker, TakeSound, ToTakeWorker } from "./takeProtocol";
+import type { FromTakeWorker, TakeSound, ToTakeWorker } from "../takeProtocol";
 
 const rate = 1000;
 const report = { verdict: "heard" } as TakeReport;

@@ -1,7 +1,7 @@
 import type { LiveFrame, LiveTracker } from "@/shared/voice/liveTracker";
 import type { TakeReport } from "@/shared/voice/takeReport";
-import { longestTakeS } from "./takeProtocol";
-import type { FromTakeWorker, TakePart, TakeSound, ToTakeWorker } from "./takeProtocol";
+import { longestTakeS } from "../takeProtocol";
+import type { FromTakeWorker, TakePart, TakeSound, ToTakeWorker } from "../takeProtocol";
 
 const tellEveryS = 0.02;
 

@@ -2,8 +2,8 @@ import { listenToTake } from "@/shared/voice/listenToTake";
 import { createLiveTracker, type LiveTracker } from "@/shared/voice/liveTracker";
 import { createNoteGlimpse } from "@/shared/voice/noteGlimpse";
 import { createTakeListener } from "./takeListener";
-import type { FromTakeWorker, ToTakeWorker } from "./takeProtocol";
-import { appendUnkept } from "./unkeptTake";
+import type { FromTakeWorker, ToTakeWorker } from "../takeProtocol";
+import { appendUnkept } from "../unkeptTake";
 
 interface WorkerScope {
   onmessage: ((event: MessageEvent<ToTakeWorker>) => void) | null;

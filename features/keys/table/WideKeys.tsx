@@ -35,7 +35,7 @@ export function WideKeys({ rows, voice, selected, onSelect, pinning, waysOf, ins
   const facts = { pinned: pinning.has, wayOf: (row: KeyRow) => bestWay(waysOf(row), filter) };
   return (
     <>
-      <PrintSheet zoom={0.74} />
+      <PrintSheet zoom={0.7} />
       <KeySentence
         rows={rows}
         filter={filter}

@@ -19,6 +19,14 @@ test("a chord inside a word keeps its column within the word's cell", () => {
   expect(screen.getByText("Am").style.left).toBe("3ch");
 });
 
+test("tabs count to the next eighth column, over the words and in them", () => {
+  render(<ChartView chart={parseChart("G\t\tC\t Am\nLow tide and\tthe harbour sleeps")} />);
+  expect(screen.getByText("C").parentElement?.parentElement?.textContent).toBe("Cthe ");
+  expect(screen.getByText("Am").parentElement?.parentElement?.textContent).toBe("Amharbour ");
+  expect(screen.getByText("Am").style.left).toBe("5ch");
+  expect(screen.getByTestId("chart").textContent).not.toContain("\t");
+});
+
 test("sections are headings and words without chords are there", () => {
   render(<ChartView chart={parseChart(text)} level={3} />);
   expect(screen.getByRole("heading", { level: 3, name: "Verse 1" })).toBeTruthy();

@@ -8,6 +8,7 @@ import { unseen } from "@/features/ui/unseen";
 import { glyphs } from "@/shared/music/pitch";
 import type { Chart, ChartLine } from "@/shared/songs/chart";
 import type { ChartToken } from "@/shared/songs/chordLine";
+import { expandTabs } from "@/shared/songs/reflow";
 import { chartCells } from "./chartCells";
 import { firstLines, sameLine, sameLines, type ShownPlace, type ShownSection } from "./shownLines";
 
@@ -116,8 +117,15 @@ function DrawnLine({ line, size }: Omit<LineProps, "marked">) {
         {line.text.trim()}
       </Text>
     );
-  if (line.kind === "lyrics") return <Row lyrics={line.lyrics} chords={[]} size={size} />;
-  return <Row lyrics={line.kind === "sung" ? line.lyrics : ""} chords={line.chords} size={size} />;
+  if (line.kind === "lyrics") return <Row lyrics={expandTabs(line.lyrics)} chords={[]} size={size} />;
+  const lyrics = line.kind === "sung" ? expandTabs(line.lyrics) : "";
+  return <Row lyrics={lyrics} chords={withoutTabs(line)} size={size} />;
+}
+
+/** The chords at the columns they stand in once tabs are counted out, as the words' tabs are. */
+function withoutTabs({ written, chords }: Extract<ChartLine, { written: string }>): readonly ChartToken[] {
+  if (!written.includes("\t")) return chords;
+  return chords.map((chord) => ({ ...chord, column: expandTabs(written.slice(0, chord.column)).length }));
 }
 
 const wholes: CSSProperties = { display: "flex", flexWrap: "wrap", alignItems: "flex-end", marginBottom: 3 };

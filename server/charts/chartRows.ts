@@ -1,5 +1,6 @@
 import { type ChartLine, parseChart } from "../../shared/songs/chart";
 import { glyphs } from "../../shared/music/pitch";
+import { expandTabs } from "../../shared/songs/reflow";
 
 /** A row of a printed chart: chords stand over the words of the same row, column by column. */
 export interface ChartRow {
@@ -15,7 +16,8 @@ interface Taken {
 
 /** A chart cut into rows of at most so many columns; a chord is never parted from its syllable, nor cut. */
 export function chartRows(text: string, columns: number): ChartRow[] {
-  const rows = parseChart(text).sections.flatMap(({ heading, lines }) => [
+  const plain = text.split("\n").map(expandTabs).join("\n");
+  const rows = parseChart(plain).sections.flatMap(({ heading, lines }) => [
     ...(heading === null ? [] : wrapWords("heading", heading.trim(), columns)),
     ...lines.flatMap((line) => rowsOf(line, columns)),
   ]);

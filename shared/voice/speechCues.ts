@@ -18,7 +18,7 @@ export interface SpeechCues {
   leaps: number;
   /** how well the notes keep to one grid of semitones, whatever its offset: 0 at random to 1 exactly */
   grid: number;
-  /** share of the held time in notes longer than most syllables */
+  /** how long the notes are held, each on its way from a syllable's length (0) to one that only singing has (1), by held time */
   long: number;
   /** clarity that three quarters of the frames with a pitch reach: a pitch that glides through its own echo repeats badly */
   clarity: number;
@@ -27,7 +27,8 @@ export interface SpeechCues {
 const WIDEST_BAND = 10;
 const UNTUNED = { from: 0.35, to: 0.8 };
 const LEAP_FROM = 3.5;
-const LONG_S = 0.45;
+const SYLLABLE_S = 0.24;
+const LONG_S = 0.6;
 const MOST_CENTS = 15;
 /** A sound this little over the room tells nothing of voice or no voice, in dB. */
 const OVER_ROOM_DB = 6;
@@ -42,7 +43,7 @@ export function speechCues(frames: readonly TrackFrame[], clear: readonly HeardN
   const clarities = frames.flatMap((f) => (f.hz === null ? [] : [f.clarity])).sort((a, b) => a - b);
   const loud = frames.filter((f) => f.levelDb > loudFromDb && f.aboveRoomDb > OVER_ROOM_DB);
   const heldS = clear.reduce((sum, n) => sum + n.heldS, 0);
-  const longS = clear.reduce((sum, n) => sum + (n.heldS > LONG_S ? n.heldS : 0), 0);
+  const lengths = clear.reduce((sum, n) => sum + n.heldS * Math.max(0, Math.min(1, (n.heldS - SYLLABLE_S) / (LONG_S - SYLLABLE_S))), 0);
   const steps = clear.slice(1).map((n, k) => Math.abs(n.midi - clear[k]!.midi));
   const share = (test: (step: number) => boolean): number => steps.filter(test).length / clear.length;
   return {
@@ -59,7 +60,7 @@ export function speechCues(frames: readonly TrackFrame[], clear: readonly HeardN
     ),
     leaps: share((step) => step > LEAP_FROM),
     grid: gridFit(clear, heldS),
-    long: longS / heldS,
+    long: lengths / heldS,
     clarity: clarities[Math.floor((clarities.length - 1) * 0.25)]!,
   };
 }

@@ -1,6 +1,6 @@
 import { glyphs, noteName, type Spelling } from "../music/pitch";
 import { COARSE_WORDS } from "./keyReason";
-import type { SharedSinger } from "./sharedKey";
+import type { SharedSinger } from "./sharedSinger";
 
 /**
  * Who has a key hardest, and by how much.

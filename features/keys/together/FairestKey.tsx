@@ -4,7 +4,7 @@ import { LiveText } from "@/features/ui/LiveText";
 import { Text } from "@/features/ui/Text";
 import { colors } from "@/features/ui/theme";
 import { moveWords } from "@/shared/music/moveWords";
-import type { GroupKey } from "./groupKeys";
+import type { GroupKey } from "./groupKey";
 import { octaveWords, placeWords } from "./groupWords";
 
 export interface FairestKeyProps {

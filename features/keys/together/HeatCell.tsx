@@ -2,7 +2,7 @@ import type { CSSProperties } from "react";
 import { setSigns } from "@/features/ui/textSigns";
 import { colors, fonts } from "@/features/ui/theme";
 import { unseen } from "@/features/ui/unseen";
-import type { Fit, GroupPart } from "./groupKeys";
+import type { Fit, GroupPart } from "./groupKey";
 
 /** One singer in one key: the score, warmer the higher it is, and at its foot how the tune lies: solid, hatched or dotted. */
 export function HeatCell({ part, strong }: { part: GroupPart; strong: boolean }) {

@@ -3,7 +3,7 @@ import { setSigns } from "@/features/ui/textSigns";
 import { colors, fonts } from "@/features/ui/theme";
 import { unseen } from "@/features/ui/unseen";
 import { useLayout } from "@/features/ui/useLayout";
-import type { GroupKey } from "./groupKeys";
+import type { GroupKey } from "./groupKey";
 import { HeatCell } from "./HeatCell";
 
 export interface HeatTableProps {

@@ -4,7 +4,7 @@ import { stripX, VoiceStrip } from "@/features/span/VoiceStrip";
 import { Text } from "@/features/ui/Text";
 import { colors, fonts } from "@/features/ui/theme";
 import { spellingIn } from "../keyRows";
-import type { GroupKey } from "./groupKeys";
+import type { GroupKey } from "./groupKey";
 import { octaveNote } from "./groupWords";
 import { groupScale } from "./groupScale";
 import { SpanScale } from "./SpanScale";

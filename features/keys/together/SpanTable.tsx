@@ -5,7 +5,7 @@ import { setSigns } from "@/features/ui/textSigns";
 import { colors, fonts } from "@/features/ui/theme";
 import { unseen } from "@/features/ui/unseen";
 import { spellingIn } from "../keyRows";
-import type { GroupKey } from "./groupKeys";
+import type { GroupKey } from "./groupKey";
 import { octaveNote } from "./groupWords";
 import { groupScale } from "./groupScale";
 import { SpanScale } from "./SpanScale";

@@ -1,5 +1,5 @@
 import type { Scale } from "@/features/span/ladderGeometry";
-import type { GroupKey } from "./groupKeys";
+import type { GroupKey } from "./groupKey";
 
 /** Lowest and highest semitone of all voices and of the tune in each of them, with a little air: one scale for all. */
 export function groupScale({ parts }: GroupKey): Scale {

@@ -3,7 +3,7 @@ import { keyFifths } from "@/shared/music/keyName";
 import { keySign } from "@/shared/music/keyWords";
 import { glyphs, noteName } from "@/shared/music/pitch";
 import { writtenKeyOf } from "../songKeys";
-import type { GroupKey, GroupPart } from "./groupKeys";
+import type { GroupKey, GroupPart } from "./groupKey";
 
 /** "Maren, Ben and Nils" */
 export function listWords(names: readonly string[]): string {

@@ -7,7 +7,8 @@ import { scoreSharedKeys } from "@/shared/keys/sharedKey";
 import { decide } from "../decision/decide";
 import { decisionFor, decisionQueries, useSaveDecision } from "../decision/decisionQueries";
 import { writtenKeyOf } from "../songKeys";
-import { groupKeys, type GroupKey, type JudgedSinger } from "./groupKeys";
+import type { GroupKey } from "./groupKey";
+import { groupKeys, type JudgedSinger } from "./groupKeys";
 import { decisionReason } from "./groupWords";
 import type { KnownSinger } from "./singers/singers";
 

@@ -4,7 +4,7 @@ import { Heading } from "@/features/ui/Heading";
 import { Text } from "@/features/ui/Text";
 import { webStyle } from "@/features/ui/webStyle";
 import type { Song } from "@/shared/contract/song";
-import { DecidedLine } from "./decision/DecidedLine";
+import { DecisionCard } from "./decision/DecisionCard";
 import { KeyColumn } from "./KeyColumn";
 import type { KeyRow } from "./keyRows";
 import { KeysMissing } from "./KeysMissing";
@@ -23,7 +23,7 @@ export interface KeyPaneProps {
 
 /** The middle column of a wide song page. */
 export function KeyPane({ song, keys, singer, selected, onSelect }: KeyPaneProps) {
-  const { rows, voice, decision, removed, noFit } = keys;
+  const { rows, voice, noFit } = keys;
   return (
     <View testID="key-pane">
       <View
@@ -75,11 +75,7 @@ export function KeyPane({ song, keys, singer, selected, onSelect }: KeyPaneProps
       ) : (
         <KeysMissing song={song} />
       )}
-      {(decision ?? removed) && (
-        <View style={{ marginTop: 12 }}>
-          <DecidedLine keys={keys} />
-        </View>
-      )}
+      <DecisionCard keys={keys} style={{ marginTop: 12 }} />
     </View>
   );
 }

@@ -11,7 +11,7 @@ import { useLayout } from "@/features/ui/useLayout";
 import type { Song } from "@/shared/contract/song";
 import { CompareLink, PinBar } from "./compare/PinBar";
 import { usePinning } from "./compare/pins";
-import { DecidedLine } from "./decision/DecidedLine";
+import { DecisionCard } from "./decision/DecisionCard";
 import { KeyDeck } from "./deck/KeyDeck";
 import { KeyList } from "./deck/KeyList";
 import { MoveByHand } from "./deck/MoveByHand";
@@ -155,11 +155,7 @@ export function KeysScreen({ song, keys, pending, voice, waysOf, instrument }: K
               </Text>
             </>
           )}
-          {decision && (
-            <View style={{ marginTop: 12 }}>
-              <DecidedLine keys={keys} />
-            </View>
-          )}
+          <DecisionCard keys={keys} style={{ marginTop: 12 }} />
           <MoveByHand rows={rows} voice={keys.voice} selected={selected} onSelect={look} />
           {!wide && <PinBar songId={song.id} pinning={pinning} />}
         </>

@@ -8,7 +8,7 @@ import { COARSE_WORDS } from "@/shared/keys/keyReason";
 import type { KeyName } from "@/shared/music/keyName";
 import { keySign } from "@/shared/music/keyWords";
 import { glyphs } from "@/shared/music/pitch";
-import { decide, decidedElsewhere, takenBack, type Choice } from "./decision/decide";
+import { canComeBack, decide, decidedElsewhere, takenBack, type Choice } from "./decision/decide";
 import { decisionHistory, type DecisionHistory } from "./decision/decisionHistory";
 import { decisionFor, decisionQueries, useRemoveDecision, useSaveDecision } from "./decision/decisionQueries";
 import { noFitWords, wholeVoice, type KeyRow } from "./keyRows";
@@ -34,7 +34,7 @@ export interface SongKeys {
   written: { chords: string[]; from: KeyName } | null;
   /** what was decided before and for other voices */
   history: DecisionHistory | null;
-  /** the key that was just let go of, while it can be brought back */
+  /** the key that was just taken back or let go of, while it can be brought back */
   removed: string | null;
   saving: boolean;
   error: Error | null;
@@ -44,7 +44,7 @@ export interface SongKeys {
   undo: () => void;
   /** Lets the decided key go with all its history. */
   remove: () => void;
-  /** Brings back what was just let go. */
+  /** Brings back what was just taken back or let go. */
   restore: () => void;
 }
 
@@ -72,9 +72,12 @@ export function useSongKeys(song: Song, { voice: singer, voices, forKeys }: Sing
   const singerId = singer?.id ?? null;
   const decision = decisionFor(decisions.data ?? [], song.id, singerId);
   const mode = writtenKeyOf(song)?.mode ?? "major";
+  // Another voice's key is told here, and changed only where that voice sings.
+  const own = decision && !decidedElsewhere(decision, singerId) ? decision : null;
   const letGo = () => {
-    if (decision) remove.mutate(decision.id, { onSuccess: () => setGone(decision) });
+    if (own) remove.mutate(own.id, { onSuccess: () => setGone(own) });
   };
+  const lost = gone && canComeBack(gone, decisions.data ?? [], song.id, singerId) ? gone : null;
   const inHand = useMemo(() => keyInHand(song, rows, decision, singerId), [song, rows, decision, singerId]);
   const written = useMemo(() => {
     const from = writtenKeyOf(song);
@@ -96,7 +99,7 @@ export function useSongKeys(song: Song, { voice: singer, voices, forKeys }: Sing
     inHand,
     written,
     history: decision && decisionHistory(decision, decisions.data ?? [], mode, voices),
-    removed: gone && gone.songId === song.id && !decision ? glyphs(keySign({ tonic: gone.tonic, mode })) : null,
+    removed: lost && glyphs(keySign({ tonic: lost.tonic, mode })),
     saving: save.isPending || remove.isPending,
     error: save.error ?? remove.error,
     take: (choice, done) => {
@@ -113,13 +116,13 @@ export function useSongKeys(song: Song, { voice: singer, voices, forKeys }: Sing
       });
     },
     undo: () => {
-      const before = decision && takenBack(decision);
-      if (before) save.mutate(before);
+      const before = own && takenBack(own);
+      if (before) save.mutate(before, { onSuccess: () => setGone(own) });
       else letGo();
     },
     remove: letGo,
     restore: () => {
-      if (gone) save.mutate(gone, { onSuccess: () => setGone(null) });
+      if (lost) save.mutate(lost, { onSuccess: () => setGone(null) });
     },
   };
 }

@@ -18,13 +18,13 @@ export interface WaysScreenProps {
   use: ReactNode;
   /** the chart in this key */
   chart: ReactNode;
-  /** when and why this key and way were taken; null while they are not */
-  kept: ReactNode;
+  /** the decided key, with when and why */
+  decided: ReactNode;
   error: Error | null;
 }
 
 /** Ways to play one song in one key; beside them, or under them on the phone, the chart in that key. */
-export function WaysScreen({ song, sign, instrument, chooser, list, use, chart, kept, error }: WaysScreenProps) {
+export function WaysScreen({ song, sign, instrument, chooser, list, use, chart, decided, error }: WaysScreenProps) {
   const phone = useLayout() === "phone";
   const column = { flexGrow: 1, flexShrink: 1, flexBasis: 0, minWidth: 0 } as const;
   const main = (
@@ -35,7 +35,7 @@ export function WaysScreen({ song, sign, instrument, chooser, list, use, chart, 
       {chooser}
       <WishPanel />
       {list}
-      {kept}
+      {decided}
     </View>
   );
   const aside = (

@@ -3,7 +3,8 @@ import { useLocalSearchParams, useRouter } from "expo-router";
 import { useState } from "react";
 import { instrumentWords } from "@/features/instruments/myInstruments";
 import { useInstrument } from "@/features/instruments/useInstrument";
-import { DecidedLine } from "@/features/keys/decision/DecidedLine";
+import { DecisionCard } from "@/features/keys/decision/DecisionCard";
+import { TryLink } from "@/features/keys/tryout/TryLink";
 import { KeyPane } from "@/features/keys/KeyPane";
 import { MyKeyCard } from "@/features/keys/decision/MyKeyCard";
 import { keyInView, useSongKeys } from "@/features/keys/useSongKeys";
@@ -55,7 +56,7 @@ function SongPage({ song }: { song: Song }) {
           song={song}
           target={key && { key, shift, decided: decision !== null }}
           card={keys.inHand && <MyKeyCard songId={song.id} inHand={keys.inHand} voice={keys.voice} />}
-          decided={(keys.decision ?? keys.removed) && <DecidedLine keys={keys} />}
+          decided={<DecisionCard keys={keys} />}
           tune={<TunePanel song={song} voice={singer.singing} shift={shift} />}
           keys={<KeyPane song={song} keys={keys} singer={singer.voice} selected={row} onSelect={setLooked} />}
           ways={
@@ -69,7 +70,12 @@ function SongPage({ song }: { song: Song }) {
               {list}
             </WayColumn>
           }
-          use={use}
+          use={
+            <>
+              {key && <TryLink songId={song.id} of={key} shift={shift} />}
+              {use}
+            </>
+          }
           shelfTools={<SongTools song={song} />}
           onRemove={() => remove.mutate(song.id, { onSuccess: () => router.replace("/songs") })}
           removal={remove}

@@ -3,7 +3,7 @@ import { useLocalSearchParams } from "expo-router";
 import { InstrumentSelect } from "@/features/instruments/InstrumentSelect";
 import { instrumentWords } from "@/features/instruments/myInstruments";
 import { useInstrument } from "@/features/instruments/useInstrument";
-import { DecidedLine } from "@/features/keys/decision/DecidedLine";
+import { DecisionCard } from "@/features/keys/decision/DecisionCard";
 import { askedKey } from "@/features/keys/songKeys";
 import { decidedHere, useSongKeys } from "@/features/keys/useSongKeys";
 import { MovedChart } from "@/features/songs/MovedChart";
@@ -55,7 +55,7 @@ function Ways({ song }: { song: Song }) {
           {...parts}
           chart={<MovedChart song={song} to={key} level={3} />}
           error={keys.error ?? error}
-          kept={keys.decision?.shift === shift && <DecidedLine keys={keys} />}
+          decided={<DecisionCard keys={keys} style={{ marginTop: 8 }} />}
         />
       )}
     </WayPane>

@@ -17,6 +17,7 @@ import type { KeyRow } from "../keyRows";
 import { KeysMissing } from "../KeysMissing";
 import { chordsIn } from "../songKeys";
 import { songWords } from "../songWords";
+import { DecisionCard } from "../decision/DecisionCard";
 import { PrintSheet } from "../table/PrintSheet";
 import { decidedHere, decidedWords, type SongKeys } from "../useSongKeys";
 import { CompareTable } from "./CompareTable";
@@ -128,6 +129,7 @@ export function CompareScreen({ song, keys, pending, voice, rows, instrument, wa
               keys.written ? chordsIn(keys.written.chords, keys.written.from, key).map(glyphs) : []
             }
           />
+          <DecisionCard keys={keys} style={{ marginTop: 16, maxWidth: 560 }} />
         </>
       )}
     </Screen>

@@ -38,6 +38,18 @@ export function takenBack(decision: Decision): Decision | null {
   return before ? { ...decision, ...before, earlier } : null;
 }
 
+/** Whether a decision that was taken back can be brought back: nothing else was decided for its song and voice since. */
+export function canComeBack(
+  gone: Decision,
+  decisions: readonly Decision[],
+  songId: string,
+  voiceId: string | null,
+): boolean {
+  if (gone.songId !== songId || decidedElsewhere(gone, voiceId)) return false;
+  const since = decisions.find((each) => each.songId === gone.songId && each.voiceId === gone.voiceId);
+  return since === undefined || (since.id === gone.id && since.decidedAt === gone.earlier[0]?.decidedAt);
+}
+
 /** "capo 3, chords in A": how the strings were to be played; null where no way was kept. */
 export function wayWords({ way }: Pick<Decision, "way">): string | null {
   if (!way) return null;

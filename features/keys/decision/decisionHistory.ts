@@ -1,20 +1,28 @@
 import type { Decision, EarlierChoice } from "@/shared/contract/decision";
+import { presets } from "@/shared/instruments/presets";
 import type { KeyName } from "@/shared/music/keyName";
-import { keySign } from "@/shared/music/keyWords";
 import { glyphs } from "@/shared/music/pitch";
 import { decidedOn, wayWords } from "./decide";
 import { otherDecisions } from "./decisionQueries";
 
-/** What stands behind the decided key, in lines. */
-export interface DecisionHistory {
+/** One choice of a key, to be read. */
+export interface ToldChoice {
+  key: KeyName;
   /** for whom it was decided; null where it holds for whoever sings */
   voice: string | null;
+  on: string;
   /** how it is to be played; null where no way was kept */
   way: string | null;
+  reason: string;
+}
+
+/** The decided key, and what stands behind it. */
+export interface DecisionHistory {
+  now: ToldChoice;
   /** newest first */
-  earlier: string[];
+  earlier: ToldChoice[];
   /** keys decided for other voices */
-  others: string[];
+  others: ToldChoice[];
 }
 
 export function decisionHistory(
@@ -23,16 +31,23 @@ export function decisionHistory(
   mode: KeyName["mode"],
   voices: readonly { id: string; name: string }[],
 ): DecisionHistory {
-  const voiceOf = (id: string | null) =>
-    id === null ? null : (voices.find((voice) => voice.id === id)?.name ?? "another voice");
-  const what = (choice: EarlierChoice) =>
-    [glyphs(keySign({ tonic: choice.tonic, mode })), wayWords(choice)].filter((part) => part !== null).join(", ");
+  const told = (choice: EarlierChoice, voiceId: string | null): ToldChoice => ({
+    key: { tonic: choice.tonic, mode },
+    voice: voiceId === null ? null : (voices.find(({ id }) => id === voiceId)?.name ?? "another voice"),
+    on: decidedOn(choice),
+    way: playedWords(choice),
+    reason: choice.reason,
+  });
   return {
-    voice: voiceOf(decision.voiceId),
-    way: wayWords(decision),
-    earlier: decision.earlier.map((each) => `${what(each)} · ${decidedOn(each)} · ${each.reason}`),
-    others: otherDecisions(all, decision).map(
-      (each) => `${voiceOf(each.voiceId) ?? "Whoever sings"}: ${what(each)} · ${decidedOn(each)}`,
-    ),
+    now: told(decision, decision.voiceId),
+    earlier: decision.earlier.map((each) => told(each, decision.voiceId)),
+    others: otherDecisions(all, decision).map((each) => told(each, each.voiceId)),
   };
+}
+
+/** "Box guitar, G-D-G: capo 3, chords in A". An own instrument is not named: it may be gone. */
+function playedWords(choice: EarlierChoice): string | null {
+  const way = wayWords(choice);
+  const name = presets.find(({ id }) => id === choice.instrument)?.name;
+  return way !== null && name !== undefined ? `${glyphs(name)}: ${way}` : way;
 }

@@ -51,6 +51,11 @@ test.each(["phone", "wide"] as const)(
     await page.getByTestId("note-up").click();
     expect((await heard()).slice(3, 7)).toEqual(["D4", "E4", "F♯4", "D4"]);
 
+    // What is not kept yet is there after a reload, and undoing leads back to what is kept.
+    await page.reload();
+    await page.getByTestId("notes-restored").waitFor();
+    expect((await heard()).slice(3, 7)).toEqual(["D4", "E4", "F♯4", "D4"]);
+
     await page.getByTestId("keep-melody").click();
     await page.getByTestId("tune-panel").waitFor();
     const kept = /\/songs\/([^/]+)/.exec(page.url())?.[1] ?? "";

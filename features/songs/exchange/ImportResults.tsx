@@ -69,9 +69,16 @@ function Words({ result, done }: { result: ImportResult; done: boolean }) {
       </Text>
     );
   return (
-    <Text variant="small" tone="soft">
-      {done ? `${from}imported. ` : `${from}read. `}
-      {link("Open")}
-    </Text>
+    <>
+      <Text variant="small" tone="soft">
+        {done ? `${from}imported. ` : `${from}read. `}
+        {link("Open")}
+      </Text>
+      {result.cautions.length > 0 && (
+        <Text variant="small" tone="honey" testID="import-cautions">
+          {result.cautions.join(" ")}
+        </Text>
+      )}
+    </>
   );
 }

@@ -71,6 +71,19 @@ test("many files of all kinds at once, each with what became of it", async () =>
   expect(songs.find(({ title }) => title === "slack water")?.writtenKey?.tonic).toBe("G");
 });
 
+test("what a melody file holds beyond what is read is said with its song", async () => {
+  const faster = "X:1\nT:Two Paces\nM:4/4\nL:1/4\nQ:1/4=90\nK:G\nGABc|d2G2|[Q:1/4=120]GABc|G4|\n";
+  const { results } = await importFiles(
+    [file("paces.abc", faster), file("plain.txt", "D A\nlow tides")],
+    quiet,
+    () => {},
+  );
+  expect(results.map((each) => each.outcome === "imported" && each.cautions)).toEqual([
+    [expect.stringMatching(/speed/)],
+    [],
+  ]);
+});
+
 test("cancelled while songs are being kept, nothing stays", async () => {
   const stop = new AbortController();
   const seen: ImportProgress["status"][] = [];

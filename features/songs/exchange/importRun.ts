@@ -2,13 +2,12 @@ import { ApiError } from "@/features/api/apiError";
 import { newId } from "@/features/api/newId";
 import { shelf } from "@/features/api/shelf";
 import type { Song } from "@/shared/contract/song";
-import type { ExportedSong } from "@/shared/contract/songExport";
-import { readIncoming } from "./incoming";
+import { readIncoming, type Incoming } from "./incoming";
 import { contentSign } from "./sameSong";
 
 /** What became of one song of a file. */
 export type ImportResult = { file: string; title: string | null } & (
-  | { outcome: "imported"; id: string }
+  | { outcome: "imported"; id: string; cautions: readonly string[] }
   | { outcome: "known"; id: string; as: string }
   | { outcome: "refused"; reason: string }
 );
@@ -54,7 +53,7 @@ export async function importFiles(
     for (const [index, file] of files.entries()) {
       say("reading", index, files.length, file.name);
       for (const incoming of await readIncoming(file, signal, new Date())) {
-        if (incoming.ok) sort(file.name, incoming.song, signs, results, waiting);
+        if (incoming.ok) sort(file.name, incoming, signs, results, waiting);
         else results.push({ file: file.name, title: incoming.title, outcome: "refused", reason: incoming.reason });
       }
       await turn();
@@ -96,7 +95,7 @@ async function knownSigns(): Promise<Map<string, { id: string; title: string }>>
 
 function sort(
   file: string,
-  content: ExportedSong,
+  { song: content, cautions = [] }: Extract<Incoming, { ok: true }>,
   signs: Map<string, { id: string; title: string }>,
   results: ImportResult[],
   waiting: Waiting[],
@@ -109,7 +108,7 @@ function sort(
   }
   const song: Song = { ...content, id: newId(), demo: null, revision: 0 };
   signs.set(sign, { id: song.id, title: song.title });
-  results.push({ file, title: song.title, outcome: "imported", id: song.id });
+  results.push({ file, title: song.title, outcome: "imported", id: song.id, cautions });
   waiting.push({ at: results.length - 1, song });
 }
 

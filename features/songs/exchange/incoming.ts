@@ -9,7 +9,8 @@ import { readSongFile } from "../files/readSongFile";
 import { readSongsFile } from "./songsFile";
 
 /** A song that a file holds, or why it gives none. `title` is null where only the file has a name. */
-export type Incoming = { ok: true; song: ExportedSong } | { ok: false; title: string | null; reason: string };
+export type Incoming =
+  { ok: true; song: ExportedSong; cautions?: readonly string[] } | { ok: false; title: string | null; reason: string };
 
 const largestText = 20_000_000;
 const mostTunes = 500;
@@ -84,6 +85,7 @@ async function readTune(file: File, signal: AbortSignal, now: Date): Promise<Inc
   const named = read.title?.replace(/\s+/g, " ").trim() ?? "";
   return {
     ok: true,
+    cautions: read.cautions,
     song: {
       ...fresh(now),
       title: named === "" ? title : [...named].slice(0, 200).join(""),

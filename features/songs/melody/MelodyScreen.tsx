@@ -69,7 +69,11 @@ export function MelodyScreen({ song, voice, instrument, chooser, sing, onKept }:
   const toKeep = byEnds ? endsToKeep : editor.toKeep;
   const keep = () => {
     setTried(true);
-    if (toKeep) save.mutate({ ...song, tune: toKeep.tune }, { onSuccess: onKept });
+    if (toKeep) save.mutate({ ...song, tune: toKeep.tune }, { onSuccess: kept });
+  };
+  const kept = () => {
+    editor.letGo();
+    onKept();
   };
   const say = (midi: number | undefined) => (midi === undefined ? "" : glyphs(noteName(midi, spelling)));
   const part = chosen && `${say(notes[chosen.from]?.midi)} to ${say(notes[chosen.to]?.midi)}`;
@@ -151,20 +155,31 @@ export function MelodyScreen({ song, voice, instrument, chooser, sing, onKept }:
           {`${save.error.message} Its notes are still here.`}
         </Notice>
       )}
+      {editor.found && !byEnds && (
+        <Notice
+          kind="good"
+          testID="notes-restored"
+          title="Your notes are back"
+          action={<Button kind="text" small label="Give them up" onPress={editor.giveUp} testID="notes-give-up" />}
+        >
+          What you sang or entered and did not keep stands here again.
+        </Notice>
+      )}
       {wide ? (
         <View
           style={webStyle({
             display: "grid",
-            gridTemplateColumns: "minmax(0, 1fr) minmax(340px, 440px)",
+            // The same elements in either place, so that the first note takes no focus away.
+            gridTemplateColumns: hasNotes ? "minmax(0, 1fr) minmax(340px, 440px)" : "minmax(0, 560px) minmax(0, 1fr)",
             columnGap: 40,
             alignItems: "start",
             borderTop: `1.5px solid ${colors.ink}`,
             paddingTop: 20,
           })}
         >
-          <View style={{ gap: 24 }}>{tune ?? entry}</View>
-          <View style={{ gap: 28 }}>
-            {tune !== null && entry}
+          <View style={webStyle({ gap: 24, gridRow: 1, gridColumn: hasNotes ? 1 : 2 })}>{tune}</View>
+          <View style={webStyle({ gap: 28, gridRow: 1, gridColumn: hasNotes ? 2 : 1 })}>
+            {entry}
             {rest}
             {place}
           </View>

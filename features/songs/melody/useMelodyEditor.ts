@@ -1,22 +1,46 @@
-import { useCallback, useMemo, useReducer, useState } from "react";
+import { useCallback, useEffect, useMemo, useReducer, useRef, useState } from "react";
 import type { Song } from "@/shared/contract/song";
 import type { TakeReport } from "@/shared/voice/takeReport";
 import type { MelodyNote } from "@/shared/songs/melody";
 import { insertNote, replaceNotes } from "@/shared/songs/noteEdits";
 import { proposeHome, sungMelody, UNTIMED_TEMPO } from "@/shared/songs/sungMelody";
+import { deviceDraft } from "../deviceDraft";
 import { keptTune, keptWords, type KeptTune } from "./keptTune";
-import { beginHistory, noteHistory } from "./noteHistory";
+import { beginHistory, noteHistory, type NoteHistory } from "./noteHistory";
 
 /** What becomes of a line that is sung. */
 export type SungPlace = "whole" | "part" | "on";
 
+interface NotesDraft {
+  notes: readonly MelodyNote[];
+  home: string | null;
+}
+
+const drafts = deviceDraft<NotesDraft>("notes-draft");
+
+function notesOf({ tune }: Song): NotesDraft {
+  return { notes: tune?.kind === "melody" ? tune.notes : [], home: tune?.home ?? null };
+}
+
+/** What is kept, and over it what was changed and not kept: undoing leads back to what is kept. */
+function historyOf({ notes, draft }: { notes: readonly MelodyNote[]; draft: NotesDraft | null }): NoteHistory {
+  const begun = beginHistory(notes);
+  return draft ? noteHistory(begun, { kind: "edit", notes: draft.notes, chosen: { from: 0, to: 0 } }) : begun;
+}
+
 /** The tune of a song under the pencil: its notes with their history, its home note, and what keeping makes of it. */
 export function useMelodyEditor(song: Song) {
-  const kept = song.tune;
-  const [history, dispatch] = useReducer(noteHistory, kept?.kind === "melody" ? kept.notes : [], beginHistory);
+  // What stood in the song when the page came, or what was kept from here: anything else is a draft.
+  const base = useRef<NotesDraft>(notesOf(song));
+  const [found, setFound] = useState(() => drafts.load(song.id));
+  const [history, dispatch] = useReducer(noteHistory, { notes: base.current.notes, draft: found }, historyOf);
   // Chosen or kept; without either it is what the notes say.
-  const [settledHome, setHome] = useState<string | null>(kept?.home ?? null);
+  const [settledHome, setHome] = useState<string | null>((found ?? base.current).home);
   const { notes, chosen } = history;
+  useEffect(() => {
+    if (notes === base.current.notes && settledHome === base.current.home) drafts.clear(song.id);
+    else drafts.save(song.id, { notes, home: settledHome });
+  }, [song.id, notes, settledHome]);
   const written = song.writtenKey;
   const proposed = useMemo(() => proposeHome(notes, written?.mode ?? null), [notes, written]);
   const home = settledHome ?? proposed?.tonic ?? written?.tonic ?? "C";
@@ -61,10 +85,24 @@ export function useMelodyEditor(song: Song) {
     [chosen, notes, settledHome, written],
   );
 
+  /** Gives up what was found again; undoing brings it back. */
+  const giveUp = () => {
+    dispatch({ kind: "edit", notes: base.current.notes, chosen: { from: 0, to: 0 } });
+    setHome(base.current.home);
+    setFound(null);
+  };
+  const letGo = () => {
+    base.current = { notes, home: settledHome };
+    drafts.clear(song.id);
+  };
+
   const toKeep: KeptTune | null = useMemo(() => keptTune(song, { kind: "melody", notes }, home), [song, notes, home]);
   return {
     history,
     dispatch,
+    found: found !== null,
+    giveUp,
+    letGo,
     home,
     setHome,
     proposed,

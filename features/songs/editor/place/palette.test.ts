@@ -6,8 +6,8 @@ const texts = (list: readonly { text: string }[]) => list.map(({ text }) => text
 test("the song's own chords by their numbers, I IV V first, then the rest of the key", () => {
   const chart = parseChart("Em  Bm7  D   A7   G  Bb  A  D/F#\nlow tide and still we row along home\n");
   const { own, others } = chordPalette(chart, { tonic: "D", mode: "major" });
-  expect(texts(own)).toEqual(["D", "D/F#", "G", "A", "A7", "Bm7", "Em", "Bb"]);
-  expect(own.map(({ roman }) => roman)).toEqual(["I", "I/3", "IV", "V", "V7", "vi7", "ii", "bVI"]);
+  expect(texts(own)).toEqual(["D", "G", "A", "Bm7", "Em", "D/F#", "A7", "Bb"]);
+  expect(own.map(({ roman }) => roman)).toEqual(["I", "IV", "V", "vi7", "ii", "I/3", "V7", "bVI"]);
   expect(texts(others)).toEqual(["Bm", "F#m", "C#dim"]);
 });
 

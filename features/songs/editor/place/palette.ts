@@ -25,9 +25,12 @@ export function chordPalette(chart: Chart, key: KeyName | null): Palette {
   if (key === null) return { own: written.map((text) => ({ text, roman: null })), others: [] };
   const own = written.map((text, place) => ({ ...numbered(text, key), place }));
   own.sort((a, b) => a.rank - b.rank || a.place - b.place);
+  // First the plainest chord of each step, then what else stands on the same steps.
+  const seen = new Set<number>();
+  const plain = own.filter(({ rank }) => rank < 20 && !seen.has(Math.floor(rank)) && seen.add(Math.floor(rank)));
   const here = new Set(written);
   return {
-    own: own.map(({ text, roman }) => ({ text, roman })),
+    own: [...plain, ...own.filter((chord) => !plain.includes(chord))].map(({ text, roman }) => ({ text, roman })),
     others: order
       .map((degree) => triad(degree, key))
       .filter((text) => !here.has(text))

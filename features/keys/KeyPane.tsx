@@ -11,6 +11,8 @@ import { KeysMissing } from "./KeysMissing";
 import { partWords } from "./partWords";
 import { ReachLine } from "./ReachLine";
 import { forWords } from "./songWords";
+import { TriedLine } from "./tryout/TriedLine";
+import { TryLink } from "./tryout/TryLink";
 import { decidedWords, type SongKeys } from "./useSongKeys";
 
 export interface KeyPaneProps {
@@ -45,6 +47,7 @@ export function KeyPane({ song, keys, singer, selected, onSelect }: KeyPaneProps
       {rows && voice ? (
         <>
           <ReachLine voice={voice} voiceId={singer?.id ?? null} />
+          <TriedLine songId={song.id} tried={keys.tried} />
           {noFit !== null && (
             <Text variant="small" testID="no-key-fits" style={{ marginBottom: 8 }}>
               {noFit}
@@ -70,6 +73,11 @@ export function KeyPane({ song, keys, singer, selected, onSelect }: KeyPaneProps
                 All twelve side by side
               </Link>
             </Text>
+          )}
+          {selected && (
+            <View style={{ marginTop: 12, alignItems: "flex-start" }}>
+              <TryLink songId={song.id} of={selected.key} shift={selected.shift} />
+            </View>
           )}
         </>
       ) : (

@@ -64,16 +64,18 @@ export function RankNow({ moves, shift, sign, why, waiting, undoing, onUndo }: R
               backgroundColor: move.row.shift === shift ? mixtures.selected : "transparent",
             }}
           >
-            <Text tone="soft" style={{ width: 24 }}>
+            <Text tone="soft" style={{ width: 24, flexShrink: 0 }}>
               {move.place}
             </Text>
-            <Text variant="title" style={{ width: 56 }}>
+            <Text variant="title" style={{ width: 56, flexShrink: 0 }}>
               {move.row.sign}
             </Text>
             <Text variant="small" tone="soft" style={{ flexGrow: 1, flexShrink: 1 }}>
               {move.row.shift === shift ? "tried just now" : changeWords(move)}
             </Text>
-            {move.scoreBefore !== move.row.score && <Text variant="small" tone="soft">{`${move.scoreBefore} →`}</Text>}
+            {move.scoreBefore !== move.row.score && (
+              <Text variant="small" tone="soft" style={{ flexShrink: 0 }}>{`${move.scoreBefore} →`}</Text>
+            )}
             <Text variant="strong" tone={move.row.beyond ? "brick" : "ink"} style={{ width: 32, textAlign: "right" }}>
               {move.row.score}
             </Text>

@@ -53,7 +53,7 @@ export function TrySetUp(props: TrySetUpProps) {
       }
     >
       {state.step === "failure" && (
-        <TryFailure words={state.words} loudspeaker={own.wishes.backing && !own.wishes.headphones} />
+        <TryFailure words={state.words} loudspeaker={state.heard && own.wishes.backing && !own.wishes.headphones} />
       )}
       {own.plan ? (
         <BeforeTry

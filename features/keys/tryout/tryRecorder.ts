@@ -17,7 +17,12 @@ type TryTakeState =
   | { step: "listening" | "stopping"; id: string; seconds: number }
   | { step: "judging"; seconds: number; listened: number }
   | { step: "heard"; take: HeardTry }
-  | { step: "failure"; words: { title: string; happened: string; safe: string; next: string } };
+  | {
+      step: "failure";
+      words: { title: string; happened: string; safe: string; next: string };
+      /** there was sound, and it was judged */
+      heard: boolean;
+    };
 
 /** What is heard right now. */
 export interface HeardNow {

@@ -15,17 +15,18 @@ import { usePlayback, type Playback } from "../recorder/usePlayback";
 import { causeWords, failureWords, isInterruption, type FailureWords } from "../sing/failureWords";
 
 /** A song as it was sung in a key. The sound stays on this device. */
-export interface HeardTry extends Pick<HeardTake, "id" | "sungAt" | "report" | "processed"> {
+interface HeardTry extends Pick<HeardTake, "id" | "sungAt" | "report" | "processed"> {
   /** what broke it off, in a sentence; null where the singer ended it */
   brokenOff: string | null;
 }
 
-export type TryTakeState =
+type TryTakeState =
   | { step: "idle" | "asking" }
   | { step: "listening" | "stopping"; id: string; seconds: number }
   | { step: "judging"; seconds: number; listened: number }
   | { step: "heard"; take: HeardTry }
-  | { step: "failure"; words: FailureWords };
+  /** `heard`: there was sound, and it was judged */
+  | { step: "failure"; words: FailureWords; heard: boolean };
 
 /** The recorder for pages where a song is tried. */
 export interface TryTake {
@@ -151,7 +152,7 @@ function shownState(state: RecorderState): TryTakeState {
       return { step: "heard", take: { id, sungAt, report, processed, brokenOff } };
     }
     case "failure":
-      return { step: "failure", words: failureWords(state.failure) };
+      return { step: "failure", words: failureWords(state.failure), heard: state.failure.report !== null };
     default:
       return { step: state.step === "asking" ? "asking" : "idle" };
   }

@@ -93,7 +93,10 @@ async function chooseKeyAndWay(page: Page, viewport: Viewport): Promise<{ key: s
     .getByTestId("use-way")
     .and(page.getByRole("button", { name: /^You use/ }))
     .waitFor();
-  await page.getByTestId("decided").getByText(/^Your key for /).waitFor();
+  await page
+    .getByTestId("decided")
+    .getByText(/^Your key for /)
+    .waitFor();
   const way = await chosenWay(page);
   await page.goto(songPage);
   await page

@@ -225,3 +225,59 @@ it("runs once, however many ask", async () => {
   await Promise.all([moveIn.afterSignUp(), moveIn.resume()]);
   expect(puts()).toHaveLength(5);
 });
+
+describe("a key decided on the device for a song and voice that the account has decided for too", () => {
+  const on = (day: number) => ({ decidedAt: `2026-03-${String(day).padStart(2, "0")}T18:30:00.000Z` });
+  const past = (tonic: string, day: number) => {
+    const {
+      id: _id,
+      songId: _songId,
+      voiceId: _voiceId,
+      earlier: _earlier,
+      ...choice
+    } = aDecision("", null, { tonic });
+    return { ...choice, ...on(day) };
+  };
+  const told = () =>
+    shelf
+      .list("decisions")
+      .then((all) => all.map(({ id, tonic, earlier }) => ({ id, tonic, earlier: earlier.map((each) => each.tonic) })));
+
+  /** Song and voice arrived, and so did a decision; the device holds another one. */
+  const both = async (device: { tonic: string; day: number }, account: { tonic: string; day: number }) => {
+    const [voice, song] = [await shelf.put("voices", aVoice()), await shelf.put("songs", aSong())];
+    const mine = { ...aDecision(song.id, voice.id, { tonic: device.tonic }), ...on(device.day) };
+    await shelf.put("decisions", { ...mine, earlier: [past("A", 2), past("F", 1)] });
+    await session.signUp(credentials);
+    const owner = session.current().account?.id ?? "";
+    api.tables.voices.set(voice.id, { owner, item: { ...voice } });
+    api.tables.songs.set(song.id, { owner, item: { ...song } });
+    const theirs = { ...aDecision(song.id, voice.id, { tonic: account.tonic }), ...on(account.day) };
+    api.tables.decisions.set(theirs.id, { owner, item: { ...theirs, earlier: [past("E", 3), past("F", 1)] } });
+    expect(await moveIn.resume()).toMatchObject({ status: "done", stayed: [] });
+    expect(onDevice()).toEqual([]);
+    return theirs.id;
+  };
+
+  it("is the present one where it is the later one, and the account's stands in its history", async () => {
+    const id = await both({ tonic: "C", day: 9 }, { tonic: "Bb", day: 6 });
+    expect(await told()).toEqual([{ id, tonic: "C", earlier: ["Bb", "E", "A", "F"] }]);
+  });
+
+  it("goes into the history where the account decided later", async () => {
+    const id = await both({ tonic: "C", day: 6 }, { tonic: "Bb", day: 9 });
+    expect(await told()).toEqual([{ id, tonic: "Bb", earlier: ["C", "E", "A", "F"] }]);
+  });
+
+  it("does not bring an older state of the same decision back", async () => {
+    const [song, day] = [await shelf.put("songs", aSong()), on(5)];
+    const first = await shelf.put("decisions", { ...aDecision(song.id, null), ...day });
+    await session.signUp(credentials);
+    const owner = session.current().account?.id ?? "";
+    api.tables.songs.set(song.id, { owner, item: { ...song } });
+    const later = { ...first, tonic: "Bb", ...on(6), earlier: [past("C", 5)] };
+    api.tables.decisions.set(first.id, { owner, item: later });
+    await moveIn.resume();
+    expect(await told()).toEqual([{ id: first.id, tonic: "Bb", earlier: ["C"] }]);
+  });
+});

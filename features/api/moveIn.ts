@@ -1,3 +1,4 @@
+import { joined } from "@/shared/contract/decisionHistory";
 import { ApiError } from "./apiError";
 import { readBelongings, type Belongings } from "./belongings";
 import { deviceShelf } from "./deviceShelf";
@@ -72,6 +73,18 @@ async function putSong(song: Items["songs"]): Promise<void> {
   }
 }
 
+/**
+ * Puts a decision into the account. Where the account has decided for the same song and voice, the later choice is the
+ * present one and the other stands in its history.
+ */
+async function putDecision(decision: Items["decisions"]): Promise<void> {
+  const { songId, voiceId } = decision;
+  const there = (await serverShelf.list("decisions")).find(
+    (each) => each.songId === songId && each.voiceId === voiceId,
+  );
+  await serverShelf.put("decisions", there ? joined(there, decision) : decision);
+}
+
 async function isSuperfluous(entry: Entry, belongings: Belongings): Promise<(song: Items["songs"]) => boolean> {
   if (entry === "sign-up" || belongings.untouched.size === 0) return () => false;
   if (entry === "sign-in") return (song) => belongings.untouched.has(song.id);
@@ -93,7 +106,8 @@ async function moveAll(entry: Entry): Promise<void> {
       return;
     }
     try {
-      if (name !== "songs") await serverShelf.put(name, item);
+      if (name === "decisions") await putDecision(item as Items["decisions"]);
+      else if (name !== "songs") await serverShelf.put(name, item);
       else if (!superfluous(item as Items["songs"])) await putSong(item as Items["songs"]);
     } catch (error) {
       if (!(error instanceof ApiError) || (!error.refused && error.status < 500)) throw error;

@@ -9,6 +9,20 @@ export function presentChoice(decision: Decision): EarlierChoice {
 }
 
 /**
+ * Two decisions for the same song and voice, made apart, as one: the later choice is the present one, and all others are
+ * its history. It keeps the id of the first.
+ */
+export function joined(first: Decision, second: Decision): Decision {
+  const [later, other] = instant(second) > instant(first) ? [second, first] : [first, second];
+  const choices = new Map(
+    [...other.earlier, presentChoice(other), ...later.earlier].map((each) => [instant(each), each] as const),
+  );
+  choices.delete(instant(later));
+  const earlier = [...choices.values()].sort((a, b) => instant(b) - instant(a)).slice(0, mostEarlier);
+  return { ...later, id: first.id, earlier };
+}
+
+/**
  * A decision on its way in, with the history of what it takes the place of: of a state the sender did not know, or of a
  * decision that another device made for the same song and voice. Going back to a choice in the history is left as sent.
  */

@@ -46,9 +46,7 @@ export function DecisionCard({ keys, style }: DecisionCardProps) {
             </View>
           </View>
           <Text variant="small">
-            {decided.otherVoice === null
-              ? history.now.reason
-              : "It was not judged for the voice you have chosen now."}
+            {decided.otherVoice === null ? history.now.reason : "It was not judged for the voice you have chosen now."}
           </Text>
           {history.now.way !== null && (
             <Text variant="small">

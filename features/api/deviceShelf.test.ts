@@ -1,4 +1,4 @@
-import { aDecision, aSong, aTake, aVoice } from "@/__tests__/client/belongings";
+import { aDecision, aSong, aTake, aTry, aVoice } from "@/__tests__/client/belongings";
 import { kept, refuseStorage } from "@/__tests__/client/memoryIdb";
 import { deviceShelf } from "./deviceShelf";
 
@@ -57,6 +57,95 @@ it("removes takes with their voice and decisions with their song", async () => {
   await deviceShelf.remove("voices", voice.id);
   expect(await deviceShelf.list("takes")).toEqual([]);
   expect(await deviceShelf.list("decisions")).toEqual([{ ...stays, voiceId: null }]);
+});
+
+it("keeps tries, refuses those of nothing, and lets them go with their song or their voice", async () => {
+  const [voice, song, other] = [aVoice(), aSong(), aSong()];
+  await deviceShelf.put("voices", voice);
+  await deviceShelf.put("songs", song);
+  await deviceShelf.put("songs", other);
+  await expect(deviceShelf.put("tries", aTry(aSong().id, null))).rejects.toMatchObject({ code: "unknown-reference" });
+  await expect(deviceShelf.put("tries", aTry(song.id, aVoice().id))).rejects.toMatchObject({ status: 422 });
+  const [sung, nobody] = [aTry(song.id, voice.id), aTry(other.id, null)];
+  await deviceShelf.put("tries", sung);
+  await deviceShelf.put("tries", aTry(other.id, voice.id));
+  await deviceShelf.put("tries", nobody);
+  await deviceShelf.put("tries", { ...sung, effort: 4 });
+  expect(await deviceShelf.get("tries", sung.id)).toEqual({ ...sung, effort: 4 });
+  await deviceShelf.remove("songs", song.id);
+  expect(await deviceShelf.list("tries")).toHaveLength(2);
+  await deviceShelf.remove("voices", voice.id);
+  expect(await deviceShelf.list("tries")).toEqual([nobody]);
+  await deviceShelf.remove("tries", nobody.id);
+  expect(await deviceShelf.list("tries")).toEqual([]);
+});
+
+describe("decisions", () => {
+  const on = (day: number) => ({ decidedAt: `2026-03-0${day}T18:30:00.000Z` });
+  const told = async () =>
+    (await deviceShelf.list("decisions"))
+      .map(({ tonic, voiceId, earlier }) => ({ tonic, voiceId, earlier: earlier.map((each) => each.tonic) }))
+      .sort((a, b) => a.tonic.localeCompare(b.tonic));
+  const place = async () => {
+    const [voice, song] = [aVoice(), aSong()];
+    await deviceShelf.put("voices", voice);
+    await deviceShelf.put("songs", song);
+    return { voice, song };
+  };
+
+  it("are one for a song and voice: a new one takes the place and keeps what was before", async () => {
+    const { voice, song } = await place();
+    await deviceShelf.put("decisions", aDecision(song.id, voice.id, { tonic: "C", ...on(1) }));
+    await deviceShelf.put("decisions", aDecision(song.id, null, { tonic: "F", ...on(2) }));
+    const put = await deviceShelf.put("decisions", aDecision(song.id, voice.id, { tonic: "D", ...on(3) }));
+    expect(put.earlier).toMatchObject([{ tonic: "C", decidedAt: on(1).decidedAt }]);
+    expect(await told()).toEqual([
+      { tonic: "D", voiceId: voice.id, earlier: ["C"] },
+      { tonic: "F", voiceId: null, earlier: [] },
+    ]);
+  });
+
+  it("keep what another tab decided meanwhile, and go back where they are taken back", async () => {
+    const { song } = await place();
+    const first = await deviceShelf.put("decisions", aDecision(song.id, null, { tonic: "C", ...on(1) }));
+    const { id: _id, songId: _songId, voiceId: _voiceId, earlier: _earlier, ...before } = first;
+    await deviceShelf.put("decisions", { ...first, tonic: "D", ...on(2), earlier: [before] });
+    await deviceShelf.put("decisions", { ...first, tonic: "E", ...on(3), earlier: [before] });
+    expect(await told()).toEqual([{ tonic: "E", voiceId: null, earlier: ["D", "C"] }]);
+    await deviceShelf.put("decisions", first);
+    expect(await told()).toEqual([{ tonic: "C", voiceId: null, earlier: [] }]);
+  });
+
+  it("of two tabs at the same time are both kept, one as the history of the other", async () => {
+    const { song } = await place();
+    await Promise.all([
+      deviceShelf.put("decisions", aDecision(song.id, null, { tonic: "C", ...on(1) })),
+      deviceShelf.put("decisions", aDecision(song.id, null, { tonic: "D", ...on(2) })),
+    ]);
+    expect(await told()).toEqual([{ tonic: "D", voiceId: null, earlier: ["C"] }]);
+  });
+
+  it("of a voice that goes become everybody's, except where a song has one for everybody", async () => {
+    const { voice, song } = await place();
+    const other = aSong();
+    await deviceShelf.put("songs", other);
+    await deviceShelf.put("decisions", aDecision(song.id, voice.id, { tonic: "C", ...on(1) }));
+    await deviceShelf.put("decisions", aDecision(song.id, voice.id, { tonic: "D", ...on(2) }));
+    await deviceShelf.put("decisions", aDecision(other.id, null, { tonic: "E", ...on(1) }));
+    await deviceShelf.put("decisions", aDecision(other.id, voice.id, { tonic: "F", ...on(2) }));
+    await deviceShelf.remove("voices", voice.id);
+    expect(await told()).toEqual([
+      { tonic: "D", voiceId: null, earlier: ["C"] },
+      { tonic: "E", voiceId: null, earlier: [] },
+    ]);
+  });
+
+  it("kept before there was a history have an empty one", async () => {
+    const { song } = await place();
+    const { earlier: _earlier, ...old } = aDecision(song.id, null);
+    kept.set(`decisions/${old.id}`, old);
+    expect(await deviceShelf.get("decisions", old.id)).toEqual({ ...old, earlier: [] });
+  });
 });
 
 it("does not let go of an item that was changed since it was read", async () => {

@@ -8,7 +8,8 @@ function autocorrelation(partials: readonly (readonly [number, number])[]): Floa
   );
 }
 
-const harmonics = (hz: number, count: number) => Array.from({ length: count }, (_, k) => [hz * (k + 1), 1 / (k + 1)] as const);
+const harmonics = (hz: number, count: number) =>
+  Array.from({ length: count }, (_, k) => [hz * (k + 1), 1 / (k + 1)] as const);
 
 test("all harmonics of a pitch are there, and of its octave below only every second", () => {
   const r = autocorrelation(harmonics(220, 9));

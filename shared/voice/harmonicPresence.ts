@@ -9,7 +9,9 @@ const LEAST_SHARE = 3e-4;
 const SURE_FROM = 3;
 
 const lastLag = MAX_LAG;
-const lagWindow = Float32Array.from({ length: MAX_LAG + 1 }, (_, lag) => (lag === 0 ? 0.5 : 0.5 + 0.5 * Math.cos((Math.PI * lag) / MAX_LAG)));
+const lagWindow = Float32Array.from({ length: MAX_LAG + 1 }, (_, lag) =>
+  lag === 0 ? 0.5 : 0.5 + 0.5 * Math.cos((Math.PI * lag) / MAX_LAG),
+);
 
 /**
  * How completely the harmonics of a pitch are there. A pitch one octave (or a twelfth) too low explains the sound's
@@ -51,7 +53,8 @@ function between(power: Float32Array, count: number, every: number, least: numbe
     const below = power[h - (h % every)]!;
     const above = h - (h % every) + every <= count ? power[h - (h % every) + every]! : below;
     const share = (h % every) / every;
-    const expected = h < every ? above : Math.max(below, 1e-3 * above) ** (1 - share) * Math.max(above, 1e-3 * below) ** share;
+    const expected =
+      h < every ? above : Math.max(below, 1e-3 * above) ** (1 - share) * Math.max(above, 1e-3 * below) ** share;
     if (expected < least && power[h]! < least) continue;
     const trust = h < every ? 0.5 : 1;
     sum += trust * Math.min(1, Math.sqrt(power[h]! / Math.max(expected, 1e-30)));

@@ -21,12 +21,19 @@ import { comfortBand, probableReach } from "./vocalReach";
  * @returns the report; its numbers are null unless the verdict is "heard"
  * @throws RangeError if the rate is outside 8-192 kHz or a4 is not positive
  */
-export function listenToTake(pcm: Float32Array, sampleRate: number, options: { hold?: boolean; a4?: number; measured?: MeasuredSound | null; onProgress?: (share: number) => void } = {}): TakeReport {
+export function listenToTake(
+  pcm: Float32Array,
+  sampleRate: number,
+  options: { hold?: boolean; a4?: number; measured?: MeasuredSound | null; onProgress?: (share: number) => void } = {},
+): TakeReport {
   const { hold = false, a4 = 440, measured = null, onProgress } = options;
   if (!(a4 > 0)) throw new RangeError("a4 must be a positive frequency in Hz");
   const { frames, room } = trackPitch(pcm, sampleRate, measured, onProgress);
   const toReference = 12 * Math.log2(440 / a4);
-  const found = findNotes(frames, hold ? HELD_IN_HOLD_S : HELD_IN_PHRASE_S).map((n) => ({ ...n, midi: n.midi + toReference }));
+  const found = findNotes(frames, hold ? HELD_IN_HOLD_S : HELD_IN_PHRASE_S).map((n) => ({
+    ...n,
+    midi: n.midi + toReference,
+  }));
   const notes = weedNotes(found);
   const durationS = pcm.length / sampleRate;
   const verdict = judgeTake({ durationS, hold, frames, notes, room, clipped: clippedShare(pcm) });
@@ -35,7 +42,18 @@ export function listenToTake(pcm: Float32Array, sampleRate: number, options: { h
   const spread = pitchSpread(clear);
   if (verdict !== "heard" || spread === null) {
     const why = refusal(verdict === "heard" ? "not-singing" : verdict);
-    return { verdict: verdict === "heard" ? "not-singing" : verdict, ...why, advice: "sing-again", ...base, range: null, comfort: null, estimate: null, tessitura: null, certainty: 0, reasons: [why.sentence] };
+    return {
+      verdict: verdict === "heard" ? "not-singing" : verdict,
+      ...why,
+      advice: "sing-again",
+      ...base,
+      range: null,
+      comfort: null,
+      estimate: null,
+      tessitura: null,
+      certainty: 0,
+      reasons: [why.sentence],
+    };
   }
   const range = { lowMidi: Math.min(...clear.map((n) => n.midi)), highMidi: Math.max(...clear.map((n) => n.midi)) };
   const comfort = comfortBand(range, spread);
@@ -54,7 +72,10 @@ export function listenToTake(pcm: Float32Array, sampleRate: number, options: { h
     estimate,
     tessitura: spread,
     certainty,
-    reasons: [...reasons, "The comfortable band keeps default reserves: about two and a half semitones at the top, one and a half at the bottom."],
+    reasons: [
+      ...reasons,
+      "The comfortable band keeps default reserves: about two and a half semitones at the top, one and a half at the bottom.",
+    ],
   };
 }
 

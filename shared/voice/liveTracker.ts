@@ -2,8 +2,9 @@ import { createLagMeter, HOP, SHORT_WINDOW, WINDOW, type LagFrame } from "../sig
 import { createResampler } from "../signal/resampler";
 import { findCandidates, type CandidateFrame } from "./pitchCandidates";
 import { createPathFinder } from "./pitchPath";
-import { trackFrame, type MeasuredSound } from "./pitchTrack";
+import type { MeasuredSound } from "./pitchTrack";
 import { measureRoom, silentRoom, type RoomFloor } from "./roomFloor";
+import { trackFrame } from "./trackFrame";
 
 /** Frames of 10 ms the live tracker looks ahead before it decides. */
 export const LOOK_AHEAD_FRAMES = 12;

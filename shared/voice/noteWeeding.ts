@@ -42,8 +42,11 @@ export function weedNotes(notes: readonly HeardNote[]): HeardNote[] {
     const background = loud - note.levelDb > BACKGROUND_DB;
     const short = note.heldS < (note.clarity < UNCLEAR ? LONE_UNCLEAR_SHORT_S : LONE_SHORT_S);
     if (!short && !background) return note;
-    const witnesses = believed.filter((other) => other.clear && other.start !== note.start && !(background && loud - other.levelDb > BACKGROUND_DB));
-    const lone = witnesses.length > 0 && witnesses.every((other) => Math.abs(other.midi - note.midi) > LONE_DISTANCE_SEMITONES);
+    const witnesses = believed.filter(
+      (other) => other.clear && other.start !== note.start && !(background && loud - other.levelDb > BACKGROUND_DB),
+    );
+    const lone =
+      witnesses.length > 0 && witnesses.every((other) => Math.abs(other.midi - note.midi) > LONE_DISTANCE_SEMITONES);
     return { ...note, clear: !lone };
   });
 }

@@ -60,20 +60,27 @@ export interface CandidateFrame {
 export function findCandidates(frame: LagFrame, room: RoomFloor, short: () => LagFrame): CandidateFrame {
   const power = frame.m[0]!;
   const roomPower = room.m[0]!;
-  const aboveRoomDb = power <= 0 ? -60 : roomPower <= 0 ? 60 : Math.max(-60, Math.min(60, 10 * Math.log10(power / roomPower)));
+  const aboveRoomDb =
+    power <= 0 ? -60 : roomPower <= 0 ? 60 : Math.max(-60, Math.min(60, 10 * Math.log10(power / roomPower)));
   const out: CandidateFrame = { candidates: [], levelDb: frame.levelDb, aboveRoomDb, mixed: false };
   if (!(10 * Math.log10(power / WINDOW) > NOTHING_DB)) return out;
   const long = peaks(cleanedDifference(frame, room, WINDOW));
   const clearest = long.reduce((top, c) => Math.max(top, c.clarity), 0);
   const loudEnough = aboveRoomDb > 3 && frame.levelDb > DIGITAL_SILENCE_DB;
-  const candidates = clearest < CLEAR_ENOUGH && loudEnough ? joined(long, peaks(cleanedDifference(short(), room, SHORT_WINDOW))) : long;
+  const candidates =
+    clearest < CLEAR_ENOUGH && loudEnough ? joined(long, peaks(cleanedDifference(short(), room, SHORT_WINDOW))) : long;
   const r = new Float32Array(lastLag + 1);
   for (let lag = 0; lag <= lastLag; lag++) r[lag] = frame.r[lag]! - room.r[lag]!;
-  out.candidates = candidates.map((c) => (hasShorter(c, candidates) ? { ...c, presence: harmonicPresence(r, c.hz) } : { ...c }));
+  out.candidates = candidates.map((c) =>
+    hasShorter(c, candidates) ? { ...c, presence: harmonicPresence(r, c.hz) } : { ...c },
+  );
   boundMultiples(out.candidates);
   const whole = out.candidates.filter((c) => c.presence >= WHOLE).reduce((top, c) => Math.max(top, c.clarity), 0);
   const any = out.candidates.reduce((top, c) => Math.max(top, c.clarity), 0);
-  out.mixed = any > 0.6 && whole < any - BEHIND && !out.candidates.some((c) => c.clarity >= any - BEHIND && harmonicPresence(r, c.hz, true) >= WHOLE);
+  out.mixed =
+    any > 0.6 &&
+    whole < any - BEHIND &&
+    !out.candidates.some((c) => c.clarity >= any - BEHIND && harmonicPresence(r, c.hz, true) >= WHOLE);
   return out;
 }
 
@@ -83,7 +90,8 @@ function boundMultiples(candidates: readonly PitchCandidate[]): void {
     for (const short of candidates) {
       const ratio = short.hz / long.hz;
       const isMultiple = ratio > 1.9 && Math.abs(ratio - Math.round(ratio)) < 0.012 * ratio;
-      if (isMultiple && short.clarity > long.clarity - 0.03) long.presence = Math.min(long.presence, 0.8 * short.presence);
+      if (isMultiple && short.clarity > long.clarity - 0.03)
+        long.presence = Math.min(long.presence, 0.8 * short.presence);
     }
   }
 }
@@ -113,7 +121,10 @@ function peaks(n: Float32Array): PitchCandidate[] {
     found.push({ hz, midi: 69 + 12 * Math.log2(hz / 440), clarity: Math.min(1, clarity), presence: 1 });
   }
   if (found.length <= MOST_CANDIDATES) return found;
-  return [...found].sort((a, b) => rank(b) - rank(a)).slice(0, MOST_CANDIDATES).sort((a, b) => b.hz - a.hz);
+  return [...found]
+    .sort((a, b) => rank(b) - rank(a))
+    .slice(0, MOST_CANDIDATES)
+    .sort((a, b) => b.hz - a.hz);
 }
 
 /** A period's multiples repeat as well as it does: where clarities are alike the shortest must stay. */

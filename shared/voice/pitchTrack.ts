@@ -1,28 +1,15 @@
 import { createLagMeter, HOP, SHORT_WINDOW, WINDOW, type LagFrame } from "../signal/lagFrame";
 import { createResampler } from "../signal/resampler";
 import { powerAt } from "./harmonicPresence";
-import { findCandidates, HIGHEST_HZ, type CandidateFrame, type PitchCandidate } from "./pitchCandidates";
+import { findCandidates, type CandidateFrame } from "./pitchCandidates";
 import { createPathFinder } from "./pitchPath";
 import { measureRoom, type RoomFloor } from "./roomFloor";
 import { markSecondVoices } from "./secondVoice";
+import { trackFrame, type TrackFrame } from "./trackFrame";
 
 const OVERTONE_FROM_MIDI = 76;
 /** What measuring takes of the time; choosing among what was measured takes the rest. */
 const MEASURING_SHARE = 0.6;
-
-/** What the tracker decided for one frame of 10 ms. */
-export interface TrackFrame {
-  /** null where unvoiced */
-  hz: number | null;
-  /** how well the sound repeats at the decided pitch, 0 to 1; of the best candidate where unvoiced */
-  clarity: number;
-  levelDb: number;
-  aboveRoomDb: number;
-  /** several sounds at once: only a common period was found, or another pitch beside the decided one */
-  mixed: boolean;
-  /** second harmonic against the first in dB, for pitches from E5 up; null elsewhere */
-  overtoneDb: number | null;
-}
 
 /** A whole take, tracked. */
 export interface PitchTrack {
@@ -81,14 +68,6 @@ export function trackPitch(
         : null,
   }));
   return { frames: markSecondVoices(frames, sound), room };
-}
-
-/** Puts the decision and the frame it was made on together; a decision above the search limit counts as no voice. */
-export function trackFrame(frame: CandidateFrame, decided: PitchCandidate | null): TrackFrame {
-  const { levelDb, aboveRoomDb, mixed } = frame;
-  const best = decided?.clarity ?? frame.candidates.reduce((top, c) => Math.max(top, c.clarity), 0);
-  const hz = decided && decided.hz <= HIGHEST_HZ ? decided.hz : null;
-  return { hz, clarity: Math.max(0, Math.min(1, best)), levelDb, aboveRoomDb, mixed, overtoneDb: null };
 }
 
 function overtone(r: Float32Array, hz: number): number {

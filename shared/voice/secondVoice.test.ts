@@ -1,16 +1,25 @@
 import { markSecondVoices } from "./secondVoice";
-import type { TrackFrame } from "./pitchTrack";
+import type { TrackFrame } from "./trackFrame";
 
 const RATE = 8000;
 /** Two seconds of ten harmonics on a pitch. */
 const tone = (hz: number, level = 0.1) =>
   Float32Array.from({ length: 2 * RATE }, (_, i) => {
     let sum = 0;
-    for (let h = 1; h <= 10 && h * hz < 3500; h++) sum += (level / h) * Math.sin((2 * Math.PI * h * hz * i) / RATE + h * h);
+    for (let h = 1; h <= 10 && h * hz < 3500; h++)
+      sum += (level / h) * Math.sin((2 * Math.PI * h * hz * i) / RATE + h * h);
     return sum;
   });
 const plus = (a: Float32Array, b: Float32Array) => a.map((x, i) => x + b[i]!);
-const track = (hz: number, clarity: number) => Array.from({ length: 190 }, (): TrackFrame => ({ hz, clarity, levelDb: -20, aboveRoomDb: 40, mixed: false, overtoneDb: null }));
+const track = (hz: number, clarity: number) =>
+  Array.from({ length: 190 }, (): TrackFrame => ({
+    hz,
+    clarity,
+    levelDb: -20,
+    aboveRoomDb: 40,
+    mixed: false,
+    overtoneDb: null,
+  }));
 const mixedShare = (frames: readonly TrackFrame[]) => frames.filter((f) => f.mixed).length / frames.length;
 
 test.each([

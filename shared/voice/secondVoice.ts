@@ -1,6 +1,6 @@
 import { createLagMeter, HOP, MAX_LAG, WINDOW } from "../signal/lagFrame";
 import { ANALYSIS_RATE } from "../signal/resampler";
-import type { TrackFrame } from "./pitchTrack";
+import type { TrackFrame } from "./trackFrame";
 
 /** What is left of a frame when everything that repeats at its pitch is taken out. */
 interface Remainder {
@@ -55,7 +55,7 @@ export function markSecondVoices(frames: readonly TrackFrame[], sound: Float32Ar
  * @returns look(sound at 8 kHz, frame number of 10 ms, pitch in Hz)
  * @see A. de Cheveigné, J. Acoust. Soc. Am. 93(6) 1993 (a voice cancelled by subtracting the sound one period before)
  */
-export function createRemainderMeter(): (sound: Float32Array, frame: number, hz: number) => Remainder {
+function createRemainderMeter(): (sound: Float32Array, frame: number, hz: number) => Remainder {
   const measure = createLagMeter();
   const left = new Float32Array(WINDOW);
   return (sound, frame, hz) => {
@@ -75,11 +75,19 @@ export function createRemainderMeter(): (sound: Float32Array, frame: number, hz:
     let lag = 1;
     while (lag < lastLag && n(lag) > 0) lag++;
     let clarity = 0;
-    for (lag = Math.max(lag, Math.floor(ANALYSIS_RATE / HIGHEST_HZ)); lag < Math.min(lastLag, ANALYSIS_RATE / LOWEST_HZ); lag++) {
+    for (
+      lag = Math.max(lag, Math.floor(ANALYSIS_RATE / HIGHEST_HZ));
+      lag < Math.min(lastLag, ANALYSIS_RATE / LOWEST_HZ);
+      lag++
+    ) {
       if (n(lag) > clarity && n(lag) >= n(lag - 1) && n(lag) >= n(lag + 1) && !isRelated(lag, period)) clarity = n(lag);
     }
     const around = Math.min(lastLag, Math.round(period));
-    return { leftDb: power > 0 ? 10 * Math.log10(Math.max(1e-6, rest / power)) : -60, clarity, atPitch: Math.max(n(around), n(around - 1), n(Math.min(lastLag, around + 1))) };
+    return {
+      leftDb: power > 0 ? 10 * Math.log10(Math.max(1e-6, rest / power)) : -60,
+      clarity,
+      atPitch: Math.max(n(around), n(around - 1), n(Math.min(lastLag, around + 1))),
+    };
   };
 }
 

@@ -1,9 +1,12 @@
-import type { TrackFrame } from "./pitchTrack";
+import type { TrackFrame } from "./trackFrame";
 import { findSigns } from "./singingSigns";
 import type { HeardNote } from "./sungNotes";
 
 /** Two seconds on one pitch; wander in cents from frame to frame, and the second harmonic in dB. */
-function held(midi: number, options: { bendCents?: number; overtoneDb?: number | ((k: number) => number); steadinessCents?: number } = {}) {
+function held(
+  midi: number,
+  options: { bendCents?: number; overtoneDb?: number | ((k: number) => number); steadinessCents?: number } = {},
+) {
   const { bendCents = 3, overtoneDb = -12, steadinessCents = 6 } = options;
   const frames = Array.from({ length: 200 }, (_, k): TrackFrame => ({
     hz: 440 * 2 ** ((midi - 69 + (bendCents / 100) * Math.sin(k * k)) / 12),
@@ -13,7 +16,18 @@ function held(midi: number, options: { bendCents?: number; overtoneDb?: number |
     mixed: false,
     overtoneDb: midi > 76 ? (typeof overtoneDb === "number" ? overtoneDb : overtoneDb(k)) : null,
   }));
-  const note: HeardNote = { start: 0, end: 2, midi, steadinessCents, vibrato: null, levelDb: -20, sustained: true, clear: true, heldS: 2, clarity: 0.97 };
+  const note: HeardNote = {
+    start: 0,
+    end: 2,
+    midi,
+    steadinessCents,
+    vibrato: null,
+    levelDb: -20,
+    sustained: true,
+    clear: true,
+    heldS: 2,
+    clarity: 0.97,
+  };
   return [frames, [note]] as const;
 }
 
@@ -44,7 +58,8 @@ test("still is only what neither wavers nor flutters", () => {
 
 test("in a guided hold only a pitch that does not move is still", () => {
   const [frames, notes] = held(64, { bendCents: 0.1, steadinessCents: 0.3 });
-  const moving = (cents: number) => frames.map((f, k) => ({ ...f, hz: f.hz! * 2 ** ((cents / 1200) * Math.sin(k / 30)) }));
+  const moving = (cents: number) =>
+    frames.map((f, k) => ({ ...f, hz: f.hz! * 2 ** ((cents / 1200) * Math.sin(k / 30)) }));
   expect(findSigns(frames, notes, true).still).toBe(true);
   expect(findSigns(moving(2), notes, true).still).toBe(false);
 });
@@ -60,7 +75,10 @@ test("notes that begin at their loudest and fade at a still pitch are struck", (
   const notes = (levelDb: (k: number) => number, bendCents = 0.2) => {
     const [frames, [note]] = held(64, { bendCents });
     const four = [0, 1, 2, 3].map((n) => ({ ...note!, midi: 60 + n, start: n / 2, end: n / 2 + 0.45, heldS: 0.45 }));
-    return findSigns(frames.map((f, k) => ({ ...f, levelDb: levelDb(k % 50) })), four).struck;
+    return findSigns(
+      frames.map((f, k) => ({ ...f, levelDb: levelDb(k % 50) })),
+      four,
+    ).struck;
   };
   expect(notes((k) => -20 - 0.1 * k)).toBe(true);
   expect(notes((k) => -20 - 0.1 * k, 4)).toBe(false);

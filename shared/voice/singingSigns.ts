@@ -1,6 +1,6 @@
 import { weightedQuantile } from "./pitchSpread";
 import { speechCues, type SpeechCues } from "./speechCues";
-import type { TrackFrame } from "./pitchTrack";
+import type { TrackFrame } from "./trackFrame";
 import type { HeardNote } from "./sungNotes";
 
 /** What tells singing from speech, from plucked strings, from whistling and from several sounds at once. */
@@ -73,7 +73,8 @@ export function findSigns(frames: readonly TrackFrame[], notes: readonly HeardNo
   const levels = frames.map((f) => f.levelDb).sort((a, b) => a - b);
   const top = levels[Math.floor(levels.length * 0.95)] ?? -Infinity;
   const loud = frames.filter((f) => f.levelDb > top - LOUD_WITHIN_DB);
-  const of = (test: (f: TrackFrame) => boolean): number => (loud.length === 0 ? 0 : loud.filter(test).length / loud.length);
+  const of = (test: (f: TrackFrame) => boolean): number =>
+    loud.length === 0 ? 0 : loud.filter(test).length / loud.length;
   return {
     heldS,
     voicedShare: of((f) => f.hz !== null),
@@ -98,19 +99,25 @@ function isStill(frames: readonly TrackFrame[], clear: readonly HeardNote[], hol
 function isStruck(frames: readonly TrackFrame[], clear: readonly HeardNote[]): boolean {
   const measured = clear.filter((n) => n.end - n.start >= LEAST_FADE_S);
   if (measured.length < LEAST_STRUCK || flutter(frames, clear) >= FLUTTER_CENTS) return false;
-  const fading = measured.filter((n) => fades(frames.slice(Math.round(n.start * 100) + 3, Math.round(n.end * 100) - 5).map((f) => f.levelDb)));
+  const fading = measured.filter((n) =>
+    fades(frames.slice(Math.round(n.start * 100) + 3, Math.round(n.end * 100) - 5).map((f) => f.levelDb)),
+  );
   return fading.length >= FADING_SHARE * measured.length;
 }
 
 /** Loudest in its first third, and falling along the line of least squares. */
 function fades(levels: readonly number[]): boolean {
   const middle = (levels.length - 1) / 2;
-  const slope = levels.reduce((sum, level, k) => sum + level * (k - middle), 0) / levels.reduce((sum, _, k) => sum + (k - middle) ** 2, 0);
+  const slope =
+    levels.reduce((sum, level, k) => sum + level * (k - middle), 0) /
+    levels.reduce((sum, _, k) => sum + (k - middle) ** 2, 0);
   return levels.indexOf(Math.max(...levels)) < levels.length / 3 && 100 * slope < -FADE_DB_PER_S;
 }
 
 function isPure(frames: readonly TrackFrame[]): boolean {
-  const overtones = frames.flatMap(({ overtoneDb }) => (overtoneDb === null || overtoneDb > OCTAVE_LOW_DB ? [] : [{ value: overtoneDb, weight: 1 }]));
+  const overtones = frames.flatMap(({ overtoneDb }) =>
+    overtoneDb === null || overtoneDb > OCTAVE_LOW_DB ? [] : [{ value: overtoneDb, weight: 1 }],
+  );
   return overtones.length > 0 && weightedQuantile(overtones, PURE_SHARE) < PURE_BELOW_DB;
 }
 
@@ -129,7 +136,9 @@ function countPitches(notes: readonly HeardNote[]): number {
 function flutter(frames: readonly TrackFrame[], notes: readonly HeardNote[]): number {
   const bends = notes.flatMap((note) => {
     const midi = inside(frames, note).flatMap((f) => (f.hz === null ? [] : [12 * Math.log2(f.hz)]));
-    const own = midi.slice(FLUTTER_REACH, -FLUTTER_REACH).map((m, i) => 100 * Math.abs(m - (midi[i]! + midi[i + 2 * FLUTTER_REACH]!) / 2));
+    const own = midi
+      .slice(FLUTTER_REACH, -FLUTTER_REACH)
+      .map((m, i) => 100 * Math.abs(m - (midi[i]! + midi[i + 2 * FLUTTER_REACH]!) / 2));
     return own.length > 0 ? [median(own)] : [];
   });
   return bends.length > 0 ? median(bends) : Infinity;
@@ -139,7 +148,9 @@ function flutter(frames: readonly TrackFrame[], notes: readonly HeardNote[]): nu
 function drift(frames: readonly TrackFrame[], notes: readonly HeardNote[]): number {
   const moves = notes.flatMap((note) => {
     const midi = inside(frames, note).flatMap((f) => (f.hz === null ? [] : [12 * Math.log2(f.hz)]));
-    const means = midi.slice(DRIFT_FRAMES - 1).map((_, i) => midi.slice(i, i + DRIFT_FRAMES).reduce((sum, m) => sum + m, 0) / DRIFT_FRAMES);
+    const means = midi
+      .slice(DRIFT_FRAMES - 1)
+      .map((_, i) => midi.slice(i, i + DRIFT_FRAMES).reduce((sum, m) => sum + m, 0) / DRIFT_FRAMES);
     return means.length > 0 ? [100 * (Math.max(...means) - Math.min(...means))] : [];
   });
   return moves.length > 0 ? median(moves) : Infinity;

@@ -1,5 +1,5 @@
 import { commonTuning, weightedQuantile } from "./pitchSpread";
-import type { TrackFrame } from "./pitchTrack";
+import type { TrackFrame } from "./trackFrame";
 import type { HeardNote } from "./sungNotes";
 
 /** What a take shows that sets speech apart from singing; each a plain measure, none decides alone. */
@@ -43,7 +43,10 @@ export function speechCues(frames: readonly TrackFrame[], clear: readonly HeardN
   const clarities = frames.flatMap((f) => (f.hz === null ? [] : [f.clarity])).sort((a, b) => a - b);
   const loud = frames.filter((f) => f.levelDb > loudFromDb && f.aboveRoomDb > OVER_ROOM_DB);
   const heldS = clear.reduce((sum, n) => sum + n.heldS, 0);
-  const lengths = clear.reduce((sum, n) => sum + n.heldS * Math.max(0, Math.min(1, (n.heldS - SYLLABLE_S) / (LONG_S - SYLLABLE_S))), 0);
+  const lengths = clear.reduce(
+    (sum, n) => sum + n.heldS * Math.max(0, Math.min(1, (n.heldS - SYLLABLE_S) / (LONG_S - SYLLABLE_S))),
+    0,
+  );
   const steps = clear.slice(1).map((n, k) => Math.abs(n.midi - clear[k]!.midi));
   const share = (test: (step: number) => boolean): number => steps.filter(test).length / clear.length;
   return {

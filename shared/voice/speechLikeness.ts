@@ -8,7 +8,17 @@ import type { SpeechCues } from "./speechCues";
  * recordings, each counted three times. An echo fills the gaps of speech and stretches its syllables, so that no cue is enough alone.
  */
 const AT_REST = 53.8;
-const WEIGHTS: SpeechCues = { band: -0.83, untuned: 5.75, voiced: -7.55, held: -14.5, unsteady: 0.115, leaps: -5.85, grid: -2.03, long: -9.39, clarity: -23.7 };
+const WEIGHTS: SpeechCues = {
+  band: -0.83,
+  untuned: 5.75,
+  voiced: -7.55,
+  held: -14.5,
+  unsteady: 0.115,
+  leaps: -5.85,
+  grid: -2.03,
+  long: -9.39,
+  clarity: -23.7,
+};
 
 /** @returns how much a take is like speech: below 0 for singing, above 0 for speech */
 export function likenessToSpeech(cues: SpeechCues): number {

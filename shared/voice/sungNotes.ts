@@ -1,5 +1,5 @@
 import { cutContour, smoothContour } from "./noteContour";
-import type { TrackFrame } from "./pitchTrack";
+import type { TrackFrame } from "./trackFrame";
 import type { SungNote } from "./takeReport";
 
 /** A note counts as held when it stays within this distance of its centre, vibrato removed. */
@@ -37,7 +37,15 @@ export function findNotes(frames: readonly TrackFrame[], leastHeldS: number): He
     const contour = smoothContour(midi);
     for (const piece of cutContour(contour)) {
       if (piece.to - piece.from < SHORTEST_NOTE_FRAMES) continue;
-      notes.push(describe(frames, voiced.slice(piece.from, piece.to), midi.slice(piece.from, piece.to), contour.slice(piece.from, piece.to), leastHeldS));
+      notes.push(
+        describe(
+          frames,
+          voiced.slice(piece.from, piece.to),
+          midi.slice(piece.from, piece.to),
+          contour.slice(piece.from, piece.to),
+          leastHeldS,
+        ),
+      );
     }
   }
   return notes;
@@ -60,7 +68,13 @@ function voicedRuns(frames: readonly TrackFrame[]): [number, number][] {
   return runs;
 }
 
-function describe(frames: readonly TrackFrame[], at: number[], midi: number[], contour: number[], leastHeldS: number): HeardNote {
+function describe(
+  frames: readonly TrackFrame[],
+  at: number[],
+  midi: number[],
+  contour: number[],
+  leastHeldS: number,
+): HeardNote {
   const centre = heldCentre(contour);
   const held = longestHeld(contour, centre);
   const heldS = (held.to - held.from) / 100 + HIDDEN_S;

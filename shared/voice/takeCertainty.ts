@@ -1,5 +1,5 @@
 import type { HeardNote } from "./sungNotes";
-import type { TrackFrame } from "./pitchTrack";
+import type { TrackFrame } from "./trackFrame";
 import type { RoomFloor } from "./roomFloor";
 
 /**
@@ -10,7 +10,11 @@ import type { RoomFloor } from "./roomFloor";
  * @param room what the room sounded like
  * @returns certainty 0 to 1 and its reasons
  */
-export function weighCertainty(notes: readonly HeardNote[], frames: readonly TrackFrame[], room: RoomFloor): { certainty: number; reasons: string[] } {
+export function weighCertainty(
+  notes: readonly HeardNote[],
+  frames: readonly TrackFrame[],
+  room: RoomFloor,
+): { certainty: number; reasons: string[] } {
   const clear = notes.filter((n) => n.clear);
   const long = notes.filter((n) => n.sustained || n.heldS >= 0.15);
   const heldS = clear.reduce((sum, n) => sum + n.heldS, 0);
@@ -26,7 +30,10 @@ export function weighCertainty(notes: readonly HeardNote[], frames: readonly Tra
   const agreement = clear.length / Math.max(1, long.length);
   const quiet = aboveRoom === null ? 0.9 : Math.max(0, Math.min(1, (aboveRoom - 3) / 22));
   const ends = sightings >= 3 ? 1 : sightings === 2 ? 0.9 : 0.7;
-  const certainty = Math.max(0.05, Math.min(0.98, (0.35 * seen + 0.3 * agreement + 0.2 * quiet + 0.15 * Math.max(0, 2 * clarity - 1)) * ends));
+  const certainty = Math.max(
+    0.05,
+    Math.min(0.98, (0.35 * seen + 0.3 * agreement + 0.2 * quiet + 0.15 * Math.max(0, 2 * clarity - 1)) * ends),
+  );
 
   const reasons = [`Heard clearly in ${clear.length} of ${long.length} ${long.length === 1 ? "note" : "notes"}.`];
   reasons.push(`You held notes for ${heldS.toFixed(1)} seconds in all.`);

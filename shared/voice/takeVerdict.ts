@@ -1,5 +1,5 @@
 import type { RoomFloor } from "./roomFloor";
-import type { TrackFrame } from "./pitchTrack";
+import type { TrackFrame } from "./trackFrame";
 import { findSigns } from "./singingSigns";
 import { likenessToSpeech } from "./speechLikeness";
 import type { HeardNote } from "./sungNotes";
@@ -44,11 +44,17 @@ export function judgeTake(evidence: Evidence): Verdict {
   const loudest = frames.reduce((top, f) => Math.max(top, f.levelDb), -Infinity);
   if (loudest < QUIET_DB) return "too-quiet";
   const signs = findSigns(frames, notes, hold);
-  const enough = hold ? signs.heldS >= LEAST_HELD_IN_HOLD_S : signs.heldS >= LEAST_HELD_S && signs.pitches >= LEAST_PITCHES;
+  const enough = hold
+    ? signs.heldS >= LEAST_HELD_IN_HOLD_S
+    : signs.heldS >= LEAST_HELD_S && signs.pitches >= LEAST_PITCHES;
   // One high note on one vowel is as pure as a whistle, which only a line of several can tell.
   if (signs.still || ((signs.whistled || signs.struck) && !hold)) return "not-singing";
-  const sung = signs.voicedShare >= VOICED_AT_LEAST && (hold || signs.cues === null || likenessToSpeech(signs.cues) < 0);
-  const monotone = signs.pitches < LEAST_PITCHES && signs.voicedShare >= VOICED_AT_LEAST && signs.heldS >= SUNG_LONG_S * notes.filter((n) => n.clear).length;
+  const sung =
+    signs.voicedShare >= VOICED_AT_LEAST && (hold || signs.cues === null || likenessToSpeech(signs.cues) < 0);
+  const monotone =
+    signs.pitches < LEAST_PITCHES &&
+    signs.voicedShare >= VOICED_AT_LEAST &&
+    signs.heldS >= SUNG_LONG_S * notes.filter((n) => n.clear).length;
   if (enough && signs.mixedShare > MIXED_AT_MOST) return "several-voices";
   if (enough && sung) return "heard";
   if (evidence.clipped > CLIPPED_BEYOND_USE) return "clipped";
@@ -68,11 +74,26 @@ function isNoise(frames: readonly TrackFrame[], room: RoomFloor): boolean {
 
 const SENTENCES: Record<Exclude<Verdict, "heard">, [string, string]> = {
   "too-short": ["That was too short to tell.", "Sing a whole verse, or hold a few notes for a second each."],
-  "too-quiet": ["Hardly any sound reached the microphone.", "Move closer to the microphone, or check that it is switched on, and sing again."],
-  "too-noisy": ["The room was too loud to hear your voice apart from it.", "Find a quieter place or come closer to the microphone, and sing again."],
-  clipped: ["The sound was too loud for the microphone.", "Step back a little or turn the microphone down, and sing again."],
-  "not-singing": ["No singing was found in this recording.", "Sing a line you know well on your own, without an instrument."],
-  "several-voices": ["More than one voice or instrument was heard at once.", "Sing alone and without an instrument for this one, so that the range is yours."],
+  "too-quiet": [
+    "Hardly any sound reached the microphone.",
+    "Move closer to the microphone, or check that it is switched on, and sing again.",
+  ],
+  "too-noisy": [
+    "The room was too loud to hear your voice apart from it.",
+    "Find a quieter place or come closer to the microphone, and sing again.",
+  ],
+  clipped: [
+    "The sound was too loud for the microphone.",
+    "Step back a little or turn the microphone down, and sing again.",
+  ],
+  "not-singing": [
+    "No singing was found in this recording.",
+    "Sing a line you know well on your own, without an instrument.",
+  ],
+  "several-voices": [
+    "More than one voice or instrument was heard at once.",
+    "Sing alone and without an instrument for this one, so that the range is yours.",
+  ],
 };
 
 /** @returns the sentence and the next step for a take that was not heard */

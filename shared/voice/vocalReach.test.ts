@@ -2,9 +2,19 @@ import fc from "fast-check";
 import { comfortBand, probableReach } from "./vocalReach";
 
 const order = fc
-  .tuple(fc.double({ min: 36, max: 84, noNaN: true }), fc.array(fc.double({ min: 0, max: 1, noNaN: true }), { minLength: 5, maxLength: 5 }), fc.double({ min: 0, max: 36, noNaN: true }))
+  .tuple(
+    fc.double({ min: 36, max: 84, noNaN: true }),
+    fc.array(fc.double({ min: 0, max: 1, noNaN: true }), { minLength: 5, maxLength: 5 }),
+    fc.double({ min: 0, max: 36, noNaN: true }),
+  )
   .map(([lowMidi, shares, span]) => {
-    const [p5, q1, median, q3, p95] = shares.sort((a, b) => a - b).map((x) => lowMidi + x * span) as [number, number, number, number, number];
+    const [p5, q1, median, q3, p95] = shares.sort((a, b) => a - b).map((x) => lowMidi + x * span) as [
+      number,
+      number,
+      number,
+      number,
+      number,
+    ];
     return { range: { lowMidi, highMidi: lowMidi + span }, spread: { p5, q1, median, q3, p95 } };
   });
 

@@ -2,7 +2,10 @@ import { deviceDraft } from "./deviceDraft";
 
 const drafts = deviceDraft<{ notes: number[] }>("trial");
 
-beforeEach(() => localStorage.clear());
+beforeEach(() => {
+  localStorage.clear();
+  sessionStorage.clear();
+});
 
 test("a draft is found again, song by song, until it is let go", () => {
   drafts.save("one", { notes: [1, 2] });
@@ -12,6 +15,12 @@ test("a draft is found again, song by song, until it is let go", () => {
   expect(drafts.load("one")).toBeNull();
   expect(drafts.load("two")).toEqual({ notes: [3] });
   expect(deviceDraft("other").load("two")).toBeNull();
+});
+
+test("what ends with the tab is kept in the tab only", () => {
+  deviceDraft("trial", "tab").save("one", { notes: [1] });
+  expect(drafts.load("one")).toBeNull();
+  expect(deviceDraft("trial", "tab").load("one")).toEqual({ notes: [1] });
 });
 
 test("a damaged draft counts as none", () => {

@@ -5,8 +5,13 @@ export interface DeviceDraft<Content> {
   clear(songId: string): void;
 }
 
-/** Drafts of one kind, which a reload does not lose. Where the device keeps nothing there are none. */
-export function deviceDraft<Content>(kind: string): DeviceDraft<Content> {
+/**
+ * Drafts of one kind, which a reload does not lose. Where the device keeps nothing there are none.
+ *
+ * @param until how long they stand: until they are let go, or until the tab is closed
+ */
+export function deviceDraft<Content>(kind: string, until: "let go" | "tab" = "let go"): DeviceDraft<Content> {
+  const store = () => (until === "tab" ? sessionStorage : localStorage);
   const keyOf = (songId: string) => `larkspan.${kind}.${songId}`;
   const tried = <Result>(run: () => Result): Result | null => {
     try {
@@ -17,8 +22,8 @@ export function deviceDraft<Content>(kind: string): DeviceDraft<Content> {
     }
   };
   return {
-    load: (songId) => tried(() => JSON.parse(localStorage.getItem(keyOf(songId)) ?? "null") as Content | null),
-    save: (songId, content) => void tried(() => localStorage.setItem(keyOf(songId), JSON.stringify(content))),
-    clear: (songId) => void tried(() => localStorage.removeItem(keyOf(songId))),
+    load: (songId) => tried(() => JSON.parse(store().getItem(keyOf(songId)) ?? "null") as Content | null),
+    save: (songId, content) => void tried(() => store().setItem(keyOf(songId), JSON.stringify(content))),
+    clear: (songId) => void tried(() => store().removeItem(keyOf(songId))),
   };
 }

@@ -6,6 +6,7 @@ import { enoughHoldS, holdNow } from "../guided/hearing/guidedHold";
 import { useHeard } from "../listening/useHeard";
 import { LineFailure } from "./LineFailure";
 import { LineListening } from "./LineListening";
+import { useFocusBack } from "./useFocusBack";
 import { useLine } from "./useLine";
 
 export interface HummedNoteProps {
@@ -32,8 +33,10 @@ export function HummedNote({ label, kind = "primary", onHummed }: HummedNoteProp
     told.current(held);
     leave();
   }, [listening, held, leave]);
+  const place = useRef<View>(null);
+  useFocusBack(place, !listening);
   return (
-    <View style={{ gap: 12 }}>
+    <View ref={place} style={{ gap: 12 }}>
       {listening ? (
         <LineListening live={live} seconds={state.seconds} stopping={false} onStop={leave} />
       ) : state.step === "failure" ? (

@@ -6,6 +6,7 @@ import { LiveText } from "@/features/ui/LiveText";
 import { Skeleton } from "@/features/ui/Skeleton";
 import { LineFailure } from "./LineFailure";
 import { LineListening } from "./LineListening";
+import { useFocusBack } from "./useFocusBack";
 import { useLine } from "./useLine";
 
 export interface SungLineProps {
@@ -29,10 +30,12 @@ export function SungLine({ label, kind = "primary", onSung }: SungLineProps) {
     told.current(heard);
     leave();
   }, [heard, leave]);
+  const place = useRef<View>(null);
+  useFocusBack(place, state.step === "idle" || state.step === "failure");
   const words =
     state.step === "listening" ? "Listening. Sing now." : state.step === "judging" ? "Stopped. Reading the notes." : "";
   return (
-    <View style={{ gap: 12 }}>
+    <View ref={place} style={{ gap: 12 }}>
       {state.step === "listening" || state.step === "stopping" ? (
         <LineListening live={live} seconds={state.seconds} stopping={state.step === "stopping"} onStop={stop} />
       ) : state.step === "judging" ? (

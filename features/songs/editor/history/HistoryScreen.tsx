@@ -1,5 +1,5 @@
 import { useMutation, useQuery, useQueryClient } from "@tanstack/react-query";
-import { useState } from "react";
+import { useEffect, useRef, useState } from "react";
 import { View } from "react-native";
 import { songVersions } from "@/features/api/songVersions";
 import { Button } from "@/features/ui/Button";
@@ -39,6 +39,15 @@ export function HistoryScreen({ song }: { song: Song }) {
   const undo = () => {
     if (replaced) restore.mutate(replaced, { onSuccess: () => setReplaced(null) });
   };
+  // The button that was pressed is gone with what it stood in.
+  const before = useRef(replaced);
+  useEffect(() => {
+    if (before.current === replaced) return;
+    before.current = replaced;
+    const next = document.querySelector<HTMLElement>('[data-testid="undo-restore"]') ?? document.querySelector("h1");
+    next?.focus({ preventScroll: true });
+    window.scrollTo(0, 0);
+  }, [replaced]);
   const params = { id: song.id };
   return (
     <Screen

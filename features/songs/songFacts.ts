@@ -1,5 +1,5 @@
 import type { Song } from "@/shared/contract/song";
-import { keySign, keyWords } from "@/shared/music/keyWords";
+import { keyWords } from "@/shared/music/keyWords";
 import { distanceWords, moveWords } from "@/shared/music/moveWords";
 import { glyphs } from "@/shared/music/pitch";
 import { chartChords, parseChart } from "@/shared/songs/chart";

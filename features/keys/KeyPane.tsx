@@ -12,7 +12,6 @@ import { partWords } from "./partWords";
 import { ReachLine } from "./ReachLine";
 import { forWords } from "./songWords";
 import { TriedLine } from "./tryout/TriedLine";
-import { TryLink } from "./tryout/TryLink";
 import { decidedWords, type SongKeys } from "./useSongKeys";
 
 export interface KeyPaneProps {
@@ -73,11 +72,6 @@ export function KeyPane({ song, keys, singer, selected, onSelect }: KeyPaneProps
                 All twelve side by side
               </Link>
             </Text>
-          )}
-          {selected && (
-            <View style={{ marginTop: 12, alignItems: "flex-start" }}>
-              <TryLink songId={song.id} of={selected.key} shift={selected.shift} />
-            </View>
           )}
         </>
       ) : (

@@ -31,13 +31,12 @@ export default function SongRoute() {
 
 function SongPage({ song }: { song: Song }) {
   const [router, remove, singer] = [useRouter(), useRemoveSong(), useSingingVoice()];
-  const [wishes] = useWishes();
+  const [[wishes], [looked, setLooked]] = [useWishes(), useState<number | null>(null)];
   const keys = useSongKeys(song, singer);
   const { instrument, settle } = useInstrument(song.id, keys.decision?.instrument ?? null);
-  const [looked, setLooked] = useState<number | null>(null);
   const { row, key, shift, decision } = keyInView(keys, looked);
-  const wide = useLayout() === "wide";
-  const search = useQuery(wayQueries.into(wide && keys.written ? { ...keys.written, instrument, wishes } : null, key));
+  const shown = useLayout() === "wide" && keys.written;
+  const search = useQuery(wayQueries.into(shown ? { ...shown, instrument, wishes } : null, key));
   return (
     <WayPane
       songId={song.id}
@@ -70,12 +69,7 @@ function SongPage({ song }: { song: Song }) {
               {list}
             </WayColumn>
           }
-          use={
-            <>
-              {key && <TryLink songId={song.id} of={key} shift={shift} />}
-              {use}
-            </>
-          }
+          use={<TryLink songId={song.id} of={key} shift={shift} beside={use} />}
           shelfTools={<SongTools song={song} />}
           onRemove={() => remove.mutate(song.id, { onSuccess: () => router.replace("/songs") })}
           removal={remove}

@@ -1,3 +1,4 @@
+import type { ReactNode } from "react";
 import { LinkButton } from "@/features/ui/LinkButton";
 import type { KeyName } from "@/shared/music/keyName";
 import { keySign } from "@/shared/music/keyWords";
@@ -5,20 +6,27 @@ import { glyphs } from "@/shared/music/pitch";
 
 export interface TryLinkProps {
   songId: string;
-  of: KeyName;
+  /** nothing is shown while no key is known */
+  of: KeyName | null;
   shift: number;
+  /** stands after it */
+  beside?: ReactNode;
 }
 
 /** The way to singing a key for real. */
-export function TryLink({ songId, of, shift }: TryLinkProps) {
+export function TryLink({ songId, of, shift, beside }: TryLinkProps) {
+  if (!of) return <>{beside}</>;
   return (
-    <LinkButton
-      kind="secondary"
-      small
-      icon="mic"
-      href={{ pathname: "/songs/[id]/try", params: { id: songId, key: of.tonic, shift: String(shift) } }}
-      label={`Try it in ${glyphs(keySign(of))}`}
-      testID="try-it"
-    />
+    <>
+      <LinkButton
+        kind="secondary"
+        small
+        icon="mic"
+        href={{ pathname: "/songs/[id]/try", params: { id: songId, key: of.tonic, shift: String(shift) } }}
+        label={`Try it in ${glyphs(keySign(of))}`}
+        testID="try-it"
+      />
+      {beside}
+    </>
   );
 }

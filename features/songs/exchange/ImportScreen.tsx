@@ -8,15 +8,25 @@ import { Screen } from "@/features/ui/Screen";
 import { Text } from "@/features/ui/Text";
 import { colors, sizes } from "@/features/ui/theme";
 import { useLayout } from "@/features/ui/useLayout";
+import { webStyle } from "@/features/ui/webStyle";
 import { refreshShelf } from "../songQueries";
 import { ImportResults } from "./ImportResults";
 import { importable } from "./incoming";
 import { importFiles, type ImportProgress } from "./importRun";
+import { WhatIsRead } from "./WhatIsRead";
+
+const besides = webStyle({
+  display: "grid",
+  gridTemplateColumns: "minmax(0, 1fr) minmax(300px, 392px)",
+  columnGap: 40,
+  alignItems: "start",
+});
 
 /** Brings many files at once onto the shelf. */
 export function ImportScreen() {
   const client = useQueryClient();
-  const wide = useLayout() !== "phone";
+  const layout = useLayout();
+  const wide = layout === "wide";
   const input = useRef<HTMLInputElement>(null);
   const running = useRef<AbortController | null>(null);
   const [progress, setProgress] = useState<ImportProgress | null>(null);
@@ -34,6 +44,7 @@ export function ImportScreen() {
     <Screen
       title="Import songs"
       crumb={{ label: "Songs", href: "/songs" }}
+      wide={wide}
       footer={
         working ? (
           <Button kind="secondary" label="Cancel" onPress={() => running.current?.abort()} testID="import-cancel" />
@@ -42,47 +53,49 @@ export function ImportScreen() {
         ) : undefined
       }
     >
-      <View style={{ gap: 20 }}>
-        <input
-          ref={input}
-          type="file"
-          multiple
-          accept={importable}
-          aria-label="Files with songs"
-          data-testid="import-files"
-          tabIndex={-1}
-          style={{ position: "absolute", width: 1, height: 1, opacity: 0, pointerEvents: "none" }}
-          onChange={(event) => {
-            const files = [...(event.target.files ?? [])];
-            event.target.value = "";
-            void take(files);
-          }}
-        />
-        <DropPlace onFiles={(files) => void take(files)} disabled={working}>
-          <Text variant="body">
-            {wide
-              ? "Drop files here, or choose them: as many as you like at once."
-              : "Choose as many files as you like at once."}
-          </Text>
-          <Text variant="small" tone="soft">
-            Texts with chords over words, ABC (one tune or a book of them), MIDI, MusicXML, and Larkspan’s own files.
-            They are read on this device.
-          </Text>
-          <Button
-            label={progress && !working ? "Choose more files" : "Choose files"}
-            kind={progress ? "secondary" : "primary"}
-            icon="file"
-            disabled={working}
-            onPress={() => input.current?.click()}
-            testID="import-choose"
-            style={{ alignSelf: "flex-start" }}
+      <View style={wide ? besides : { gap: 24 }}>
+        <View style={{ gap: 20 }}>
+          <input
+            ref={input}
+            type="file"
+            multiple
+            accept={importable}
+            aria-label="Files with songs"
+            data-testid="import-files"
+            tabIndex={-1}
+            style={{ position: "absolute", width: 1, height: 1, opacity: 0, pointerEvents: "none" }}
+            onChange={(event) => {
+              const files = [...(event.target.files ?? [])];
+              event.target.value = "";
+              void take(files);
+            }}
           />
-        </DropPlace>
-        {progress && working && <ProgressBar progress={progress} />}
-        <LiveText variant="strong" testID="import-words">
-          {progress ? progressWords(progress) : ""}
-        </LiveText>
-        {progress && progress.results.length > 0 && <ImportResults results={progress.results} done={!working} />}
+          <DropPlace onFiles={(files) => void take(files)} disabled={working}>
+            <Text variant="body">
+              {layout !== "phone"
+                ? "Drop files here, or choose them: as many as you like at once."
+                : "Choose as many files as you like at once."}
+            </Text>
+            <Text variant="small" tone="soft">
+              They are read on this device.
+            </Text>
+            <Button
+              label={progress && !working ? "Choose more files" : "Choose files"}
+              kind={progress ? "secondary" : "primary"}
+              icon="file"
+              disabled={working}
+              onPress={() => input.current?.click()}
+              testID="import-choose"
+              style={{ alignSelf: "flex-start" }}
+            />
+          </DropPlace>
+          {progress && working && <ProgressBar progress={progress} />}
+          <LiveText variant="strong" testID="import-words">
+            {progress ? progressWords(progress) : ""}
+          </LiveText>
+          {progress && progress.results.length > 0 && <ImportResults results={progress.results} done={!working} />}
+        </View>
+        {(wide || !progress) && <WhatIsRead />}
       </View>
     </Screen>
   );

@@ -76,7 +76,7 @@ export function AnswerStep({ song, answer, busy, onTake }: AnswerStepProps) {
         {kind !== "same" && (
           <Offer
             title="Look for another chart"
-            text="Clears this one, so that you can paste another. The one before stays in the song's earlier states."
+            text="Clears this one, so that you can paste another. The one before stays in the song's earlier versions."
             label="Clear the chart"
             busy={busy}
             testID="take-none"

@@ -52,7 +52,7 @@ export function noteCapo(song: Song, { capo, recording, chart }: Reconciliation)
 export function clearChart(song: Song): ChartChange {
   return {
     song: { ...song, chart: "" },
-    said: "The chart is cleared for another one. The one before stays in the song's earlier states.",
+    said: "The chart is cleared for another one. The one before stays in the song's earlier versions.",
   };
 }
 

@@ -9,13 +9,24 @@ import { Notice } from "@/features/ui/Notice";
 import { QueryState } from "@/features/ui/QueryState";
 import { Screen } from "@/features/ui/Screen";
 import { Skeleton } from "@/features/ui/Skeleton";
+import { useLayout } from "@/features/ui/useLayout";
+import { webStyle } from "@/features/ui/webStyle";
 import type { Song } from "@/shared/contract/song";
 import { refreshShelf, songQueries } from "../../songQueries";
+import { VersionDetail } from "./VersionDetail";
 import { VersionRow } from "./VersionRow";
 import { versionQueries } from "./versionQueries";
 
+const besides = webStyle({
+  display: "grid",
+  gridTemplateColumns: "minmax(0, 1fr) minmax(0, 1fr)",
+  columnGap: 40,
+  alignItems: "start",
+});
+
 /** The earlier states of a song: who, when, what was changed; to look at and to bring back. */
 export function HistoryScreen({ song }: { song: Song }) {
+  const wide = useLayout() === "wide";
   const client = useQueryClient();
   const versions = useQuery(versionQueries.list(song.id));
   const [replaced, setReplaced] = useState<Song | null>(null);
@@ -49,6 +60,18 @@ export function HistoryScreen({ song }: { song: Song }) {
     window.scrollTo(0, 0);
   }, [replaced]);
   const params = { id: song.id };
+  // On wide pages one of them always stands beside the list, first the newest.
+  const shownOf = (list: readonly { id: string }[]) =>
+    list.some(({ id }) => id === open) ? open : wide ? (list[0]?.id ?? null) : null;
+  const detail = (versionId: string) => (
+    <VersionDetail
+      key={versionId}
+      song={song}
+      versionId={versionId}
+      busy={restore.isPending}
+      onRestore={(earlier) => restore.mutate(earlier)}
+    />
+  );
   return (
     <Screen
       title="Earlier versions"
@@ -56,7 +79,7 @@ export function HistoryScreen({ song }: { song: Song }) {
       back={{ pathname: "/songs/[id]/edit", params }}
       wide
     >
-      <View style={{ gap: 16, maxWidth: 860 }}>
+      <View style={{ gap: 16, maxWidth: wide ? undefined : 860 }}>
         {replaced && (
           <Notice
             kind="good"
@@ -89,19 +112,23 @@ export function HistoryScreen({ song }: { song: Song }) {
                 action={<LinkButton small label="Edit the song" href={{ pathname: "/songs/[id]/edit", params }} />}
               />
             ) : (
-              <View role="list" testID="versions">
-                {list.map((entry, index) => (
-                  <VersionRow
-                    key={entry.id}
-                    song={song}
-                    entry={entry}
-                    told={index < 12 || open === entry.id}
-                    open={open === entry.id}
-                    onOpen={() => setOpen(open === entry.id ? null : entry.id)}
-                    busy={restore.isPending}
-                    onRestore={(earlier) => restore.mutate(earlier)}
-                  />
-                ))}
+              <View style={wide ? besides : null}>
+                <View role="list" testID="versions">
+                  {list.map((entry, index) => (
+                    <VersionRow
+                      key={entry.id}
+                      song={song}
+                      entry={entry}
+                      told={index < 12 || open === entry.id}
+                      open={shownOf(list) === entry.id}
+                      beside={wide}
+                      onOpen={() => setOpen(open === entry.id && !wide ? null : entry.id)}
+                    >
+                      {!wide && open === entry.id && detail(entry.id)}
+                    </VersionRow>
+                  ))}
+                </View>
+                {wide && detail(shownOf(list) ?? "")}
               </View>
             )
           }

@@ -93,14 +93,11 @@ async function chooseKeyAndWay(page: Page, viewport: Viewport): Promise<{ key: s
     .getByTestId("use-way")
     .and(page.getByRole("button", { name: /^You use/ }))
     .waitFor();
-  await page
-    .getByTestId("decided")
-    .getByText(/^Your key for /)
-    .waitFor();
+  await page.getByTestId("decided").getByText("Your key", { exact: true }).waitFor();
   const way = await chosenWay(page);
   await page.goto(songPage);
   await page
-    .getByText(viewport === "wide" ? /^Your key for / : /^My key/)
+    .getByText(viewport === "wide" ? /^Your key$/ : /^My key/)
     .first()
     .waitFor();
   return { key, way };
@@ -157,7 +154,7 @@ describe.each(["phone", "wide"] as const)("the whole journey on the %s", (viewpo
     await second.page.getByTestId("send").click();
     await second.page.getByRole("heading", { level: 1, name: "Salt on the Window" }).waitFor();
     await second.page
-      .getByText(viewport === "wide" ? /^Your key for / : /^My key/)
+      .getByText(viewport === "wide" ? /^Your key$/ : /^My key/)
       .first()
       .waitFor();
     await second.page.goto(`${songAddress}/ways`);

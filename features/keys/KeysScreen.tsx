@@ -155,7 +155,7 @@ export function KeysScreen({ song, keys, pending, voice, waysOf, instrument }: K
               </Text>
             </>
           )}
-          <DecisionCard keys={keys} style={{ marginTop: 12 }} />
+          <DecisionCard keys={keys} style={{ marginTop: 12, maxWidth: 620 }} />
           <MoveByHand rows={rows} voice={keys.voice} selected={selected} onSelect={look} />
           {!wide && <PinBar songId={song.id} pinning={pinning} />}
         </>

@@ -1,6 +1,6 @@
 import { QueryClientProvider } from "@tanstack/react-query";
 import { act, renderHook, waitFor } from "@testing-library/react";
-import { aSong, aVoice } from "@/__tests__/client/belongings";
+import { aDecision, aSong, aVoice } from "@/__tests__/client/belongings";
 import { kept, refuseStorage } from "@/__tests__/client/memoryIdb";
 import { queryClient } from "@/features/api/queryClient";
 import { shelf } from "@/features/api/shelf";
@@ -94,6 +94,27 @@ test("a decision made without a voice holds for every voice", async () => {
   await waitFor(() => expect(nobody.current.decision).not.toBeNull());
   const mine = open(evenings);
   await waitFor(() => expect(mine.current.inHand?.because).toBe("decided"));
+});
+
+test("a group's key in another octave is the same key", async () => {
+  await shelf.put("decisions", aDecision(song.id, null, { tonic: "C", shift: 10 }));
+  const keys = open(evenings);
+  await waitFor(() => expect(keys.current.inHand?.because).toBe("decided"));
+  const row = keys.current.rows!.find(({ key }) => key.tonic === "C")!;
+  expect(row.shift).toBe(-2);
+  expect(decidedWords(keys.current, row.shift)).toBe("my key");
+  expect(keyInView(keys.current, null).decision).toMatchObject({ tonic: "C", voiceId: null });
+  expect(decidedHere(keys.current, row.shift + 6)).toBeNull();
+});
+
+test("a voice's own key is added to the group's, and does not take its place", async () => {
+  const group = await shelf.put("decisions", aDecision(song.id, null, { tonic: "G", shift: 5 }));
+  const keys = open(evenings);
+  await waitFor(() => expect(keys.current.decision).toEqual(group));
+  act(() => keys.current.take({ tonic: "C", shift: -2, instrument: null, way: null }));
+  await waitFor(() => expect(keys.current.decision).toMatchObject({ tonic: "C", voiceId: voice.id, earlier: [] }));
+  expect(await shelf.list("decisions")).toHaveLength(2);
+  expect(keys.current.history?.others).toMatchObject([{ key: { tonic: "G" }, voice: null }]);
 });
 
 test("where no key holds the tune that is said, and none is called the best", () => {

@@ -127,14 +127,17 @@ export function useSongKeys(song: Song, { voice: singer, voices, forKeys }: Sing
   };
 }
 
-/** The decision, where it was made for this move and with the present voice. */
+/** The same key, though perhaps in another octave: a group's key moves each voice to where it sings it. */
+const sameKey = (a: number, b: number) => (a - b) % 12 === 0;
+
+/** The decision, where it was made for this key and with the present voice. */
 export function decidedHere({ decision, decided }: Pick<SongKeys, "decision" | "decided">, shift: number) {
-  return decision?.shift === shift && decided?.otherVoice === null ? decision : null;
+  return decision && sameKey(decision.shift, shift) && decided?.otherVoice === null ? decision : null;
 }
 
 /** What a row says of itself where its key was decided; null on all others. */
 export function decidedWords({ decision, decided }: Pick<SongKeys, "decision" | "decided">, shift: number) {
-  if (!decided || decision?.shift !== shift) return null;
+  if (!decided || !decision || !sameKey(decision.shift, shift)) return null;
   return decided.otherVoice === null ? "my key" : `decided for ${decided.otherVoice}`;
 }
 

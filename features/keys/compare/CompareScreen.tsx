@@ -129,7 +129,7 @@ export function CompareScreen({ song, keys, pending, voice, rows, instrument, wa
               keys.written ? chordsIn(keys.written.chords, keys.written.from, key).map(glyphs) : []
             }
           />
-          <DecisionCard keys={keys} style={{ marginTop: 16, maxWidth: 560 }} />
+          <DecisionCard keys={keys} style={{ marginTop: 16, maxWidth: 620 }} />
         </>
       )}
     </Screen>

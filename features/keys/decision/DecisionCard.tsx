@@ -97,7 +97,8 @@ export function DecisionCard({ keys, style }: DecisionCardProps) {
 
 function titleOf(voice: string | null, otherVoice: string | null): string {
   if (otherVoice !== null) return `Decided for ${otherVoice}`;
-  return voice === null ? "Your key, whoever sings" : `Your key for ${voice}`;
+  if (voice === null) return "Your key, whoever sings";
+  return /^(my|your) voice$/i.test(voice.trim()) ? "Your key" : `Your key for ${voice}`;
 }
 
 const row = { flexDirection: "row", flexWrap: "wrap", alignItems: "center", columnGap: 4 } as const;

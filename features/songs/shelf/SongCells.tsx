@@ -72,7 +72,7 @@ export const SongCells = memo(function SongCells({
       <td style={td} title={mine?.words}>
         {mine ? (
           <>
-            <KeySign of={mine.key} size={20} />
+            <KeySign of={mine.key} size={20} tone={mine.elsewhere ? "soft" : "ink"} />
             <span style={unseen}>{`. ${mine.words}`}</span>
           </>
         ) : (

@@ -12,7 +12,7 @@ test.each([
   async (viewport, scheme) => {
     const { context, page, errors } = await stage.open("none", viewport, scheme);
     await signInAsMaren(page, "/songs");
-    await page.getByText("Gulls on the Chandler’s Roof").first().click();
+    await page.getByText("Gulls on the Chandler's Roof").first().click();
     await page.getByTestId("chart").waitFor();
     const song = page.url().replace(/[?#].*$/, "");
     const card = page.getByTestId("decided");
@@ -63,7 +63,7 @@ test.each([
     await page.goto("/songs");
     await page
       .getByRole(viewport === "wide" ? "row" : "listitem")
-      .filter({ hasText: "Gulls on the Chandler’s Roof" })
+      .filter({ hasText: "Gulls on the Chandler's Roof" })
       .filter({ hasText: /My key since \d+ \w+ \d+/ })
       .waitFor();
     expect(errors).toEqual([]);

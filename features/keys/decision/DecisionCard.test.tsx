@@ -122,8 +122,10 @@ test("undo of the only choice leaves none, and it can be brought back", async ()
   await screen.findByTestId("bring-back");
   expect(await shelf.list("decisions")).toEqual([]);
   expect(screen.queryByTestId("decided")).toBeNull();
+  await waitFor(() => expect(document.activeElement).toBe(screen.getByTestId("bring-back")));
   press("bring-back");
   await waitFor(() => expect(card()).toMatch(/^C/));
+  await waitFor(() => expect(document.activeElement).toBe(screen.getByTestId("key-history")));
 });
 
 test("removing takes the history along, and brings all of it back", async () => {

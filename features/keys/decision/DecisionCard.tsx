@@ -1,4 +1,4 @@
-import { useState } from "react";
+import { useEffect, useRef, useState } from "react";
 import { View, type StyleProp, type ViewStyle } from "react-native";
 import { Button } from "@/features/ui/Button";
 import { Card } from "@/features/ui/Card";
@@ -17,6 +17,14 @@ export interface DecisionCardProps {
 export function DecisionCard({ keys, style }: DecisionCardProps) {
   const { decided, saving, history, removed } = keys;
   const [open, setOpen] = useState(false);
+  const wasRemoved = useRef(removed);
+  useEffect(() => {
+    const [was, is] = [wasRemoved.current !== null, removed !== null];
+    wasRemoved.current = removed;
+    // The button that was pressed may be gone; the next step takes the focus then.
+    if (was === is || document.activeElement !== document.body) return;
+    document.querySelector<HTMLElement>(`[data-testid=${is ? "bring-back" : "key-history"}]`)?.focus();
+  }, [removed]);
   if (!history && removed === null) return null;
   return (
     <View style={[{ gap: 8 }, style]}>

@@ -1,6 +1,6 @@
 import { QueryClientProvider } from "@tanstack/react-query";
 import { act, fireEvent, render, screen, waitFor, within } from "@testing-library/react";
-import { aSong } from "@/__tests__/client/belongings";
+import { aDecision, aSong, aVoice } from "@/__tests__/client/belongings";
 import { kept, refuseStorage } from "@/__tests__/client/memoryIdb";
 import { queryClient } from "@/features/api/queryClient";
 import { shelf } from "@/features/api/shelf";
@@ -181,6 +181,25 @@ test("the decided key is kept for whoever sings, with its reason", async () => {
   const [decision] = await shelf.list("decisions");
   expect(decision).toMatchObject({ songId: ferry.id, voiceId: null });
   expect(decision?.reason).toMatch(/^The fairest key for Maren and Ben: the lowest score is \d+/);
+});
+
+test("a voice's own key stays beside the group's, and what the group decided before is its history", async () => {
+  const maren = await shelf.put("voices", aVoice());
+  const own = await shelf.put("decisions", aDecision(ferry.id, maren.id));
+  open();
+  press("add-voice-v1");
+  addByHand("Ben", "G2", "E4");
+  const take = async (tonic: string) => {
+    press(`pick-${tonic}`);
+    await act(async () => press("take-shared-key"));
+    await waitFor(() => expect(screen.getByTestId("shared-key-kept")).toBeTruthy());
+  };
+  await take("E");
+  await take("F");
+  const decisions = await shelf.list("decisions");
+  expect(decisions).toHaveLength(2);
+  expect(decisions).toContainEqual(own);
+  expect(decisions.find(({ voiceId }) => voiceId === null)).toMatchObject({ tonic: "F", earlier: [{ tonic: "E" }] });
 });
 
 test("without a tune, and without the voices, there is a next step", () => {

@@ -7,6 +7,7 @@ import {
   type InfiniteData,
   type QueryClient,
 } from "@tanstack/react-query";
+import { useRef } from "react";
 import { ApiError } from "@/features/api/apiError";
 import { queryClient } from "@/features/api/queryClient";
 import { shelf } from "@/features/api/shelf";
@@ -68,14 +69,29 @@ export async function refreshShelf(client: QueryClient): Promise<void> {
   ]);
 }
 
-/** Keeps a song. A key that was decided stays with it. */
+/** Whether something was not kept because the song was changed elsewhere meanwhile. */
+export function isClash(error: unknown): boolean {
+  return error instanceof ApiError && error.code === "changed-elsewhere";
+}
+
+/**
+ * Keeps a song. A key that was decided stays with it. Where it was changed elsewhere meanwhile, what stands there now is
+ * fetched: the next try is a change of that, and that stays in the earlier versions.
+ */
 export function useSaveSong() {
   const client = useQueryClient();
+  const clashed = useRef(false);
   return useMutation({
-    mutationFn: (song: Song) => shelf.put("songs", song),
+    mutationFn: (song: Song) => shelf.put("songs", song, { version: clashed.current }),
     onSuccess: async (song) => {
+      clashed.current = false;
       client.setQueryData(songQueries.detail(song.id).queryKey, song);
       await refreshShelf(client);
+    },
+    onError: async (error, { id }) => {
+      if (!isClash(error)) return;
+      clashed.current = true;
+      await client.invalidateQueries({ queryKey: songQueries.detail(id).queryKey });
     },
   });
 }
@@ -92,7 +108,7 @@ export function useChangeSong() {
       try {
         return await put();
       } catch (error) {
-        if (error instanceof ApiError && error.code === "changed-elsewhere") return put();
+        if (isClash(error)) return put();
         throw error;
       }
     },

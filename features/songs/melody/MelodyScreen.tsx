@@ -16,7 +16,7 @@ import type { SingingVoice } from "@/shared/keys/keyScore";
 import { tonicPitchClass } from "@/shared/music/keyName";
 import { glyphs, noteName, pitchClass } from "@/shared/music/pitch";
 import { tuneSpan } from "@/shared/songs/tuneSpan";
-import { useSaveSong } from "../songQueries";
+import { isClash, useSaveSong } from "../songQueries";
 import { NoteEntry } from "./entry/NoteEntry";
 import { useTapTone } from "./entry/useTapTone";
 import { HomeChoice } from "./HomeChoice";
@@ -152,7 +152,9 @@ export function MelodyScreen({ song, voice, instrument, chooser, sing, onKept }:
     >
       {save.error && (
         <Notice kind="error" title="The tune is not kept yet">
-          {`${save.error.message} Its notes are still here.`}
+          {isClash(save.error)
+            ? `${save.error.message} Your notes are still here. Keep them again to put them in; what stands there now stays in the earlier versions.`
+            : `${save.error.message} Its notes are still here.`}
         </Notice>
       )}
       {editor.found && !byEnds && (

@@ -90,6 +90,8 @@ export function useMelodyEditor(song: Song) {
     dispatch({ kind: "edit", notes: base.current.notes, chosen: { from: 0, to: 0 } });
     setHome(base.current.home);
     setFound(null);
+    // The button that was pressed is gone with its notice.
+    document.querySelector("h1")?.focus({ preventScroll: true });
   };
   const letGo = () => {
     base.current = { notes, home: settledHome };

@@ -68,9 +68,9 @@ export function KeySpan({
         underOpacity={0.16}
       />
       <Hatch id={`${id}w`} pitch={soft.pitch} line={1} lineOpacity={0.42} under="none" />
-      <Rect x={left} y={0} width={softLeft - left} height={height} fill={`url(#${id}w)`} />
-      <Rect x={softRight} y={0} width={right - softRight} height={height} fill={`url(#${id}w)`} />
-      <Rect x={softLeft} y={0} width={softRight - softLeft} height={height} fill="var(--band)" />
+      <Rect x={left} y={0} width={Math.max(0, softLeft - left)} height={height} fill={`url(#${id}w)`} />
+      <Rect x={softRight} y={0} width={Math.max(0, right - softRight)} height={height} fill={`url(#${id}w)`} />
+      <Rect x={softLeft} y={0} width={Math.max(0, softRight - softLeft)} height={height} fill="var(--band)" />
       {!fine &&
         rungs.map((midi) => (
           <Line

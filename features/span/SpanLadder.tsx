@@ -153,7 +153,7 @@ export function SpanLadder({
             <Rect
               x={columnX + measure.column + 4}
               y={y(shown.high) - 8}
-              width={Math.min(width - marksX, note.length * 6.2 + 8)}
+              width={Math.max(0, Math.min(width - marksX, note.length * 6.2 + 8))}
               height={16}
               fill={ground}
             />

@@ -3,7 +3,7 @@ import type { Scale } from "./ladderGeometry";
 
 /** Width of a row, half a semitone of air at both ends. */
 export function keySpanWidth(scale: Scale, perSemitone: number): number {
-  return (scale.high - scale.low + 2) * perSemitone;
+  return Math.max(0, (scale.high - scale.low + 2) * perSemitone);
 }
 
 /** Horizontal place of a pitch; one scale for all rows. */

@@ -1,3 +1,4 @@
+import { useQuery } from "@tanstack/react-query";
 import { useRouter } from "expo-router";
 import { useState, type ReactNode } from "react";
 import { useWindowDimensions } from "react-native";
@@ -19,10 +20,13 @@ import { chordsIn } from "../songKeys";
 import { songWords } from "../songWords";
 import { DecisionCard } from "../decision/DecisionCard";
 import { PrintSheet } from "../table/PrintSheet";
+import { tryQueries } from "../tryout/tryQueries";
 import { decidedHere, decidedWords, type SongKeys } from "../useSongKeys";
 import { CompareTable } from "./CompareTable";
 import { compareTitle } from "./compareWords";
 import { usePins } from "./pins";
+import { TakesTried } from "./TakesTried";
+import { takesIn } from "./takesWords";
 
 export interface CompareScreenProps {
   song: Song;
@@ -42,6 +46,7 @@ export function CompareScreen({ song, keys, pending, voice, rows, instrument, wa
   const layout = useLayout();
   const window = useWindowDimensions().width;
   const { setPins } = usePins(song.id);
+  const tries = useQuery(tryQueries.all());
   const [chosen, setChosen] = useState<number | null>(null);
   const selected = rows.find(({ shift }) => shift === chosen) ?? rows[0] ?? null;
   const isMine = selected !== null && decidedHere(keys, selected.shift) !== null;
@@ -128,6 +133,14 @@ export function CompareScreen({ song, keys, pending, voice, rows, instrument, wa
             chordsOf={({ key }) =>
               keys.written ? chordsIn(keys.written.chords, keys.written.from, key).map(glyphs) : []
             }
+            takesOf={(row) => (
+              <TakesTried
+                songId={song.id}
+                row={row}
+                takes={tries.data && takesIn(tries.data, song.id, voice?.id ?? null, row.shift)}
+                fault={tries.error}
+              />
+            )}
           />
           <DecisionCard keys={keys} style={{ marginTop: 16, maxWidth: 620 }} />
         </>

@@ -31,6 +31,7 @@ function show(chooser: string | null = "my guitar") {
       wayOf={(row) => `way into ${row.sign}`}
       factsOf={factsOf}
       chordsOf={(row) => row.chords}
+      takesOf={(row) => `sung in ${row.sign}`}
     />,
   );
   return heard;
@@ -53,6 +54,7 @@ test("each key is a column, each thing that is compared a row", () => {
     "Why not one higher?",
     "Chords",
     "Best waymy guitar",
+    "Takes triedand how they felt",
   ]);
   expect(
     within(table)
@@ -61,6 +63,7 @@ test("each key is a column, each thing that is compared a row", () => {
   ).toEqual([0, 1, 2].map(() => expect.stringMatching(/^Voice from .* of the time in comfort/)));
   expect(screen.getByRole("columnheader", { name: /my key/ }).textContent).toContain(second.sign);
   expect(screen.getByText(`way into ${third.sign}`)).toBeTruthy();
+  expect(screen.getByText(`sung in ${second.sign}`)).toBeTruthy();
 });
 
 test("a key is chosen by its head and taken away by its cross", () => {

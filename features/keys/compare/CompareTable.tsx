@@ -33,6 +33,8 @@ export interface CompareTableProps {
   factsOf: (row: KeyRow) => PartFacts;
   /** all chords of the song in a key, with glyphs */
   chordsOf: (row: KeyRow) => readonly string[];
+  /** what was sung in a key */
+  takesOf: (row: KeyRow) => ReactNode;
 }
 
 /** Up to four keys in full, one a column: scores with their reasons, spans on one ladder, parts, chords and ways. */
@@ -49,6 +51,7 @@ export function CompareTable({
   wayOf,
   factsOf,
   chordsOf,
+  takesOf,
 }: CompareTableProps) {
   const group = useId();
   const { lead, each, total } = compareColumns(room, rows.length);
@@ -171,6 +174,13 @@ export function CompareTable({
               </tr>
             </>
           )}
+          <tr>
+            <th scope="row" style={{ ...td, ...first, ...label, ...ruled }}>
+              <span style={{ display: "block" }}>Takes tried</span>
+              <span style={{ fontWeight: 400, fontSize: 13 }}>and how they felt</span>
+            </th>
+            {cells(takesOf, ruled)}
+          </tr>
         </tbody>
       </table>
     </div>

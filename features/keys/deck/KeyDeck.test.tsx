@@ -66,6 +66,16 @@ test("the handle moves the tune by semitones, tells the score, and looks at the 
   expect(told()).toContain(`${next.sign}, `);
 });
 
+test("a window of hardly any width leaves no drawing less than nothing wide", () => {
+  // jsdom lays nothing out: its window is 0 px wide, as a browser's may be while it opens.
+  expect(document.documentElement.clientWidth).toBe(0);
+  const { container } = render(<Page />);
+  const widths = [...container.querySelectorAll("[width]")].map((each) => Number(each.getAttribute("width")));
+  expect(widths.length).toBeGreaterThan(20);
+  expect(widths.filter((width) => !(width >= 0))).toEqual([]);
+  expect(Number(screen.getByTestId("move-by-hand").querySelector("svg")?.getAttribute("width"))).toBe(166);
+});
+
 test("where octaves leave a gap the nearest key is taken", () => {
   const [low, high] = [
     { ...rows[0]!, shift: -9 },

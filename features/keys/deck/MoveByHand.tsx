@@ -21,6 +21,9 @@ export interface MoveByHandProps {
   onSelect: (row: KeyRow) => void;
 }
 
+/** A window may be of any width while it opens or is turned; a ladder needs room for its column, a mark and the handle. */
+const leastWidth = 166;
+
 /** The ladder with a handle: drags the tune by semitones through the voice, and every step has its score at once. */
 export function MoveByHand({ rows, voice, selected, onSelect }: MoveByHandProps) {
   const [moved, setMoved] = useState<number | null>(null);
@@ -47,7 +50,7 @@ export function MoveByHand({ rows, voice, selected, onSelect }: MoveByHandProps)
           voice={voice}
           marks={row.marks}
           step={12}
-          width={Math.min(420, room)}
+          width={Math.min(420, Math.max(leastWidth, room))}
           scale={scale}
           spelling={spellingIn(row.key)}
           shift={{

@@ -11,20 +11,24 @@ export interface TryLinkProps {
   shift: number;
   /** stands after it */
   beside?: ReactNode;
+  /** it was sung in this key before */
+  again?: boolean;
+  kind?: "secondary" | "text";
 }
 
 /** The way to singing a key for real. */
-export function TryLink({ songId, of, shift, beside }: TryLinkProps) {
+export function TryLink({ songId, of, shift, beside, again = false, kind = "secondary" }: TryLinkProps) {
   if (!of) return <>{beside}</>;
   return (
     <>
       <LinkButton
-        kind="secondary"
+        kind={kind}
         small
         icon="mic"
         href={{ pathname: "/songs/[id]/try", params: { id: songId, key: of.tonic, shift: String(shift) } }}
-        label={`Try it in ${glyphs(keySign(of))}`}
+        label={`Try it ${again ? "again " : ""}in ${glyphs(keySign(of))}`}
         testID="try-it"
+        {...(kind === "text" ? { style: { alignSelf: "flex-start", marginLeft: -8 } } : null)}
       />
       {beside}
     </>

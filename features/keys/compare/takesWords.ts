@@ -21,18 +21,19 @@ export function takesSummary(tries: readonly Try[]): string {
   return shares.length === 0 ? count : `${count}, best ${percentOf(Math.max(...shares))} in tune`;
 }
 
-/** "felt easy; 92 % in tune, every note reached" */
+/** "felt hard work; 78 % in tune, A4 fell short" */
 export function takeInWords({ effort, measures }: Try, spelling: "sharps" | "flats"): string {
   const felt = effort === null ? "how it felt is not said" : `felt ${effortWords[effort - 1]}`;
   if (!measures) return `${felt}; not measured`;
   const { inTune, fellShort } = measures;
   const note = fellShort && glyphs(noteName(Math.round(fellShort.midi), spelling));
-  const reached = !fellShort
-    ? "every note reached"
-    : fellShort.semitones === null
-      ? `${note} left out`
-      : `${note} ${fellShort.side === "above" ? "fell short" : "came out higher"}`;
-  return inTune === null ? `${felt}; too little sung to tell` : `${felt}; ${percentOf(inTune)} in tune, ${reached}`;
+  const missed =
+    fellShort === null
+      ? ""
+      : fellShort.semitones === null
+        ? `, ${note} left out`
+        : `, ${note} ${fellShort.side === "above" ? "fell short" : "came out higher"}`;
+  return inTune === null ? `${felt}; too little sung to tell` : `${felt}; ${percentOf(inTune)} in tune${missed}`;
 }
 
 /** "Tue 24 Nov" */

@@ -42,7 +42,8 @@ export function KeyDeck({ rows, voice, selected, onSelect, pinning }: KeyDeckPro
     shown.current = at;
     const box = deck.current;
     const place = box ? placesOf(box, cards.current)[at] : undefined;
-    if (box && place !== undefined) box.scrollTo({ left: place, behavior: first ? "instant" : "smooth" });
+    const calm = window.matchMedia?.("(prefers-reduced-motion: reduce)").matches ?? false;
+    if (box && place !== undefined) box.scrollTo({ left: place, behavior: first || calm ? "instant" : "smooth" });
   }, [at]);
 
   const onScroll = () => {

@@ -99,7 +99,7 @@ it.each([
   ["one word of a hundred thousand letters", "x".repeat(100_000), 200],
   ["a line of fifty thousand chords", "G ".repeat(50_000), 200],
   ["fifty thousand signs that no font has", "😀".repeat(45_000), 200],
-  ["a hundred thousand tabulators", "\t".repeat(100_000), 422],
+  ["a hundred thousand tabulators", "\t".repeat(100_000), 200],
   ["more pages than anybody prints", "G\n".repeat(50_000), 422],
   ["more bytes than are taken", "♯".repeat(100_000), 413],
 ])("answers %s without a fault, and soon", async (_what, hostile, status) => {

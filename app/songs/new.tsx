@@ -3,7 +3,5 @@ import { EditScreen } from "@/features/songs/editor/EditScreen";
 
 export default function NewSongRoute() {
   const router = useRouter();
-  return (
-    <EditScreen song={null} onSaved={(id) => router.replace({ pathname: "/songs/[id]", params: { id } })} />
-  );
+  return <EditScreen song={null} onSaved={(id) => router.replace({ pathname: "/songs/[id]", params: { id } })} />;
 }

@@ -11,7 +11,7 @@ import { KeysMissing } from "./KeysMissing";
 import { partWords } from "./partWords";
 import { ReachLine } from "./ReachLine";
 import { forWords } from "./songWords";
-import { TriedLine } from "./tryout/TriedLine";
+import { TriedLine } from "./tryout/kept/TriedLine";
 import { decidedWords, type SongKeys } from "./useSongKeys";
 
 export interface KeyPaneProps {

@@ -23,7 +23,7 @@ import { songWords } from "./songWords";
 import type { FoundWays } from "./table/tableWays";
 import { WideKeys } from "./table/WideKeys";
 import { TogetherLink } from "./together/TogetherLink";
-import { TriedLine } from "./tryout/TriedLine";
+import { TriedLine } from "./tryout/kept/TriedLine";
 import { TryLink } from "./tryout/TryLink";
 import { decidedHere, decidedWords, type SongKeys } from "./useSongKeys";
 

@@ -12,7 +12,7 @@ import { canComeBack, decide, decidedElsewhere, takenBack, type Choice } from ".
 import { decisionHistory, type DecisionHistory } from "./decision/decisionHistory";
 import { decisionFor, decisionQueries, useRemoveDecision, useSaveDecision } from "./decision/decisionQueries";
 import { noFitWords, wholeVoice, type KeyRow } from "./keyRows";
-import { triesOfVoice, voiceAfter } from "./tryout/triedRows";
+import { triesOfVoice, voiceAfter } from "./tryout/kept/triedRows";
 import { tryQueries, useSendWaiting } from "./tryout/tryQueries";
 import { keyInHand, keyRowsOf, songChords, writtenKeyOf, type KeyInHand } from "./songKeys";
 

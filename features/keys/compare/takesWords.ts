@@ -1,6 +1,6 @@
 import type { Try } from "@/shared/contract/try";
 import { glyphs, noteName } from "@/shared/music/pitch";
-import { effortWords } from "../tryout/effortWords";
+import { effortWords } from "../tryout/report/effortWords";
 
 const percentOf = (share: number) => `${Math.round(100 * share)} %`;
 

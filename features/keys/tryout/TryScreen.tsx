@@ -6,11 +6,11 @@ import { Screen } from "@/features/ui/Screen";
 import { Skeleton } from "@/features/ui/Skeleton";
 import { keySign } from "@/shared/music/keyWords";
 import { glyphs } from "@/shared/music/pitch";
-import { TryKept } from "./TryKept";
-import { TryResult } from "./TryResult";
-import { TrySetUp } from "./TrySetUp";
+import { TryKept } from "./kept/TryKept";
+import { TryResult } from "./report/TryResult";
+import { TrySetUp } from "./setup/TrySetUp";
 import type { TryScreenProps } from "./tryScreenProps";
-import { TrySinging } from "./TrySinging";
+import { TrySinging } from "./singing/TrySinging";
 import { useTry } from "./useTry";
 
 /** A key sung for real: chosen, sung with its backing, measured, kept, and the keys as they then stand. */

@@ -4,8 +4,8 @@ import type { SingingVoice } from "@/shared/keys/keyScore";
 import type { KeyName } from "@/shared/music/keyName";
 import type { ChartLine } from "@/shared/songs/chart";
 import type { SongKeys } from "../useSongKeys";
-import type { TryRecorder } from "./tryRecorder";
-import type { TriedKey } from "./tryWishes";
+import type { TryRecorder } from "./singing/tryRecorder";
+import type { TriedKey } from "./setup/tryWishes";
 
 /** What the page where a key is tried is given. */
 export interface TryScreenProps {

@@ -5,8 +5,8 @@ import type { TakeMeasures } from "@/shared/keys/takeMeasures";
 import type { BackingPlan } from "@/shared/songs/backing/backingPlan";
 import { type BackingPlayer, useBacking } from "../backing/useBacking";
 import { recall, remember } from "./tabMemory";
-import type { HeardTry, TryRecorder } from "./tryRecorder";
-import { countOnly, type TriedKey, tryPlan, type TryWishes, usualWishes } from "./tryWishes";
+import type { HeardTry, TryRecorder } from "./singing/tryRecorder";
+import { countOnly, type TriedKey, tryPlan, type TryWishes, usualWishes } from "./setup/tryWishes";
 
 /** What belongs to a take that waits to be kept. */
 interface Waiting {

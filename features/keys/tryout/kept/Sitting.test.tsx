@@ -4,7 +4,7 @@ import { aSong, aTry, aVoice } from "@/__tests__/client/belongings";
 import { kept, refuseStorage } from "@/__tests__/client/memoryIdb";
 import { queryClient } from "@/features/api/queryClient";
 import { shelf } from "@/features/api/shelf";
-import { useSongKeys } from "../useSongKeys";
+import { useSongKeys } from "../../useSongKeys";
 import { Sitting } from "./Sitting";
 
 jest.mock("idb-keyval", () => ({

@@ -7,14 +7,14 @@ import { Screen } from "@/features/ui/Screen";
 import type { Crumb } from "@/features/ui/ScreenHead";
 import { Text } from "@/features/ui/Text";
 import { useLayout } from "@/features/ui/useLayout";
-import type { KeyRow } from "../keyRows";
+import type { KeyRow } from "../../keyRows";
 import { ComfortChange } from "./ComfortChange";
 import { rankMoves } from "./rankMoves";
 import { RankNow } from "./RankNow";
 import { Sitting } from "./Sitting";
 import { rowsWith, triesOfVoice } from "./triedRows";
-import { tryQueries, useRemoveTry } from "./tryQueries";
-import type { TryScreenProps } from "./tryScreenProps";
+import { tryQueries, useRemoveTry } from "../tryQueries";
+import type { TryScreenProps } from "../tryScreenProps";
 
 export interface TryKeptProps extends TryScreenProps {
   sign: string;

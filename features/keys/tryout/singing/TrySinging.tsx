@@ -9,13 +9,13 @@ import { useLayout } from "@/features/ui/useLayout";
 import type { Song } from "@/shared/contract/song";
 import type { KeyName } from "@/shared/music/keyName";
 import type { ChartLine } from "@/shared/songs/chart";
-import { BeatLights } from "../backing/BeatLights";
-import { spellingIn } from "../keyRows";
+import { BeatLights } from "../../backing/BeatLights";
+import { spellingIn } from "../../keyRows";
 import { timedLines } from "./songLines";
 import { TryLines } from "./TryLines";
 import type { TryRecorder } from "./tryRecorder";
 import { TryRoad } from "./TryRoad";
-import type { Try } from "./useTry";
+import type { Try } from "../useTry";
 
 export interface TrySingingProps {
   song: Song;

@@ -1,5 +1,5 @@
 import { timedLines } from "./songLines";
-import { tryPlan, usualWishes } from "./tryWishes";
+import { tryPlan, usualWishes } from "../setup/tryWishes";
 import { aSong } from "@/__tests__/client/belongings";
 
 const chart = ["Verse 1", "C       G", "Rope on the quay,", "F      C", "bell on the bay."].join("\n");

@@ -5,11 +5,11 @@ import { LinkButton } from "@/features/ui/LinkButton";
 import { Text } from "@/features/ui/Text";
 import { colors } from "@/features/ui/theme";
 import type { Song } from "@/shared/contract/song";
-import type { KeyRow } from "../keyRows";
-import { effortWords } from "./effortWords";
-import type { KnownTry } from "./tryQueries";
-import { measureWords, wholeMeasures } from "./measureWords";
-import { spellingIn } from "../keyRows";
+import type { KeyRow } from "../../keyRows";
+import { effortWords } from "../report/effortWords";
+import type { KnownTry } from "../tryQueries";
+import { measureWords, wholeMeasures } from "../report/measureWords";
+import { spellingIn } from "../../keyRows";
 import type { RankMove } from "./rankMoves";
 
 export interface SideBySideProps {

@@ -9,7 +9,7 @@ import type { PlannedNote } from "@/shared/songs/backing/backingPlan";
 import { MeasureList } from "./MeasureList";
 import { PhrasePicture } from "./PhrasePicture";
 import type { SungPicture } from "./sungPicture";
-import type { TryRecorder } from "./tryRecorder";
+import type { TryRecorder } from "../singing/tryRecorder";
 
 export interface PhraseRowProps {
   phrase: PhraseMeasures;

@@ -7,8 +7,8 @@ import { SideBySide } from "./SideBySide";
 import { sittingOf } from "./sitting";
 import { rowsWith, triesOfVoice } from "./triedRows";
 import { TryList } from "./TryList";
-import { tryQueries } from "./tryQueries";
-import type { TryScreenProps } from "./tryScreenProps";
+import { tryQueries } from "../tryQueries";
+import type { TryScreenProps } from "../tryScreenProps";
 
 /** What was tried in this sitting, side by side, and every try that counts; nothing where nothing was tried. */
 export function Sitting({ song, keys, singer, voice }: Pick<TryScreenProps, "song" | "keys" | "singer" | "voice">) {

@@ -9,8 +9,8 @@ import { MeasureList } from "./MeasureList";
 import { wholeMeasures } from "./measureWords";
 import { PhraseRow } from "./PhraseRow";
 import { sungPicture } from "./sungPicture";
-import type { TryRecorder } from "./tryRecorder";
-import type { MeasuredTry } from "./useTry";
+import type { TryRecorder } from "../singing/tryRecorder";
+import type { MeasuredTry } from "../useTry";
 
 export interface TryReportProps {
   measured: MeasuredTry;

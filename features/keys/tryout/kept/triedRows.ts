@@ -3,8 +3,8 @@ import type { Try } from "@/shared/contract/try";
 import { type TriedVoice, triedVoice } from "@/shared/keys/keyEvidence";
 import type { SingingVoice } from "@/shared/keys/keyScore";
 import type { PitchBand } from "@/shared/voice/takeReport";
-import { type KeyRow, wholeVoice } from "../keyRows";
-import { keyRowsOf } from "../songKeys";
+import { type KeyRow, wholeVoice } from "../../keyRows";
+import { keyRowsOf } from "../../songKeys";
 
 /** The keys as they stand with some tries. */
 export interface TriedRows {

@@ -7,13 +7,13 @@ import type { Song } from "@/shared/contract/song";
 import type { KeyName } from "@/shared/music/keyName";
 import { keySign } from "@/shared/music/keyWords";
 import { glyphs } from "@/shared/music/pitch";
-import { spellingIn } from "../keyRows";
+import { spellingIn } from "../../keyRows";
 import { EffortQuestion } from "./EffortQuestion";
-import { tryOf } from "./tryOf";
-import { useKeepTry } from "./tryQueries";
-import type { TryRecorder } from "./tryRecorder";
+import { tryOf } from "../tryOf";
+import { useKeepTry } from "../tryQueries";
+import type { TryRecorder } from "../singing/tryRecorder";
 import { TryReport } from "./TryReport";
-import type { MeasuredTry, Try } from "./useTry";
+import type { MeasuredTry, Try } from "../useTry";
 
 export interface TryResultProps {
   song: Song;

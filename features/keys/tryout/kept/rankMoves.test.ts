@@ -1,4 +1,4 @@
-import type { KeyRow } from "../keyRows";
+import type { KeyRow } from "../../keyRows";
 import { moveSentence, rankMoves, whatMoved } from "./rankMoves";
 
 const row = (tonic: string, shift: number, score: number) =>

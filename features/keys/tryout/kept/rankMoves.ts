@@ -1,4 +1,4 @@
-import type { KeyRow } from "../keyRows";
+import type { KeyRow } from "../../keyRows";
 
 /** A key's place and score before and after evidence. */
 export interface RankMove {

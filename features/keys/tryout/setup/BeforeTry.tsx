@@ -8,9 +8,9 @@ import { Select } from "@/features/ui/Select";
 import { Text } from "@/features/ui/Text";
 import { useLayout } from "@/features/ui/useLayout";
 import type { BackingPlan } from "@/shared/songs/backing/backingPlan";
-import { BeatLights } from "../backing/BeatLights";
-import { headphoneWords, voiceWords } from "../backing/backingWords";
-import type { BackingPlayer } from "../backing/useBacking";
+import { BeatLights } from "../../backing/BeatLights";
+import { headphoneWords, voiceWords } from "../../backing/backingWords";
+import type { BackingPlayer } from "../../backing/useBacking";
 import { lengthWords, tempoLimits, type TryWishes } from "./tryWishes";
 
 export interface BeforeTryProps {

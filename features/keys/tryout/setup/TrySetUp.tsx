@@ -7,10 +7,10 @@ import { LinkButton } from "@/features/ui/LinkButton";
 import type { Crumb } from "@/features/ui/ScreenHead";
 import { moveWords } from "@/shared/music/moveWords";
 import { BeforeTry } from "./BeforeTry";
-import { Sitting } from "./Sitting";
-import { TryFailure } from "./TryFailure";
-import type { TryScreenProps } from "./tryScreenProps";
-import type { Try } from "./useTry";
+import { Sitting } from "../kept/Sitting";
+import { TryFailure } from "../singing/TryFailure";
+import type { TryScreenProps } from "../tryScreenProps";
+import type { Try } from "../useTry";
 
 export interface TrySetUpProps extends TryScreenProps {
   sign: string;

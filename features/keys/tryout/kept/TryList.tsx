@@ -5,8 +5,8 @@ import { Notice } from "@/features/ui/Notice";
 import { Text } from "@/features/ui/Text";
 import { colors } from "@/features/ui/theme";
 import { glyphs } from "@/shared/music/pitch";
-import { effortWords } from "./effortWords";
-import { type KnownTry, useRemoveTry } from "./tryQueries";
+import { effortWords } from "../report/effortWords";
+import { type KnownTry, useRemoveTry } from "../tryQueries";
 
 export interface TryListProps {
   songId: string;

@@ -4,7 +4,7 @@ import { measureTake } from "@/shared/keys/measureTake";
 import { midiToHz } from "@/shared/music/pitch";
 import type { TakeReport } from "@/shared/voice/takeReport";
 import { TryReport } from "./TryReport";
-import { tryPlan, usualWishes } from "./tryWishes";
+import { tryPlan, usualWishes } from "../setup/tryWishes";
 
 const notes = [62, 64, 66, 67, 69, 67, 66, 62].map((midi, start) => ({ midi, start, duration: 1 }));
 const song = aSong({ tune: { kind: "melody", notes, home: "D" } });

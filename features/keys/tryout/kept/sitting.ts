@@ -1,4 +1,4 @@
-import type { KnownTry } from "./tryQueries";
+import type { KnownTry } from "../tryQueries";
 
 const sittingMs = 3 * 3_600_000;
 const mostKeys = 3;

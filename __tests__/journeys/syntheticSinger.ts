@@ -13,6 +13,7 @@ export async function singSynthetically(page: Page): Promise<void> {
     let voice: OscillatorNode;
     let mark: GainNode;
     let marked = 0;
+    let graphs = 0;
     navigator.mediaDevices.getUserMedia = async () => {
       const context = new openContext();
       await context.resume();
@@ -20,7 +21,7 @@ export async function singSynthetically(page: Page): Promise<void> {
       voice = new OscillatorNode(context, { frequency: 220 });
       voice.setPeriodicWave(context.createPeriodicWave(new Float32Array(partials.length), partials));
       const loud = new GainNode(context, { gain: 0.25 });
-      mark = new GainNode(context, { gain: 0 });
+      mark = new GainNode(context, { gain: marked * 0.004 });
       const out = context.createMediaStreamDestination();
       voice.connect(loud).connect(out);
       const high = new OscillatorNode(context, { frequency: 15_000 });
@@ -38,7 +39,11 @@ export async function singSynthetically(page: Page): Promise<void> {
       const bins = new Float32Array(ear.frequencyBinCount);
       const bin = Math.round((15_000 * ear.fftSize) / this.sampleRate);
       const channel = new MessageChannel();
+      graphs += 1;
+      const graph = graphs;
       channel.port1.onmessage = () => {
+        // The ear of a graph that was put away hears its last sound for ever.
+        if (graph !== graphs) return;
         ear.getFloatFrequencyData(bins);
         const there = (bins[bin] ?? -Infinity) > -75;
         if (singer.noteAtMs > 0 && singer.arrivedAtMs === 0 && there === (marked === 1)) {

@@ -1,10 +1,10 @@
-import { useCallback, useEffect, useRef, useState } from "react";
-import { Pressable, View } from "react-native";
+import { useCallback, useState } from "react";
+import { View } from "react-native";
 import { LevelMeter } from "@/features/span/LevelMeter";
+import { meterLevel } from "@/features/span/meterLevel";
 import { PitchTrail } from "@/features/span/PitchTrail";
-import { Icon } from "@/features/ui/Icon";
+import { StopButton } from "@/features/ui/StopButton";
 import { Text } from "@/features/ui/Text";
-import { colors, sizes } from "@/features/ui/theme";
 import { timeOf, type LiveSound } from "../recorder/liveSound";
 import { longestTakeS } from "../recorder/takeProtocol";
 import { noteWord } from "../noteWords";
@@ -28,7 +28,7 @@ export function LineListening({ live, seconds, stopping, onStop }: LineListening
     const note = noteNow([...frames, ...ahead]);
     return note ? noteWord(note.midi) : "–";
   });
-  const level = useHeard(live, ({ peak, levelDb }) => (peak >= 0.99 ? 0 : Math.round(levelDb / 2.5) * 2.5));
+  const level = useHeard(live, meterLevel);
   return (
     <View style={{ gap: 12 }}>
       <View style={{ flexDirection: "row", alignItems: "center", gap: 16 }}>
@@ -42,7 +42,7 @@ export function LineListening({ live, seconds, stopping, onStop }: LineListening
       </View>
       <Trail live={live} />
       <LevelMeter levelDb={level} />
-      <Stop stopping={stopping} onStop={onStop} />
+      <StopButton stopping={stopping} onStop={onStop} />
     </View>
   );
 }
@@ -57,34 +57,5 @@ function Trail({ live }: { live: LiveSound }) {
     <View onLayout={({ nativeEvent }) => setWidth(nativeEvent.layout.width)} style={{ height: trailHeight }}>
       {width > 0 && <PitchTrail read={read} width={width} height={trailHeight} testID="pitch-trail" />}
     </View>
-  );
-}
-
-/** It has the focus while listening, so that Space or Enter ends the line. */
-function Stop({ stopping, onStop }: { stopping: boolean; onStop: () => void }) {
-  const button = useRef<View>(null);
-  useEffect(() => button.current?.focus(), []);
-  return (
-    <Pressable
-      ref={button}
-      role="button"
-      onPress={onStop}
-      disabled={stopping}
-      testID="sing-stop"
-      style={{
-        height: 64,
-        borderRadius: sizes.radius,
-        backgroundColor: colors.plum,
-        flexDirection: "row",
-        alignItems: "center",
-        justifyContent: "center",
-        gap: 10,
-      }}
-    >
-      <Icon name="stop" size={26} color={colors.onPlum} />
-      <Text variant="strong" tone="onPlum" style={{ fontSize: 20, lineHeight: 24 }}>
-        {stopping ? "Stopping" : "Stop"}
-      </Text>
-    </Pressable>
   );
 }

@@ -1,9 +1,10 @@
-import { useCallback, useEffect, useRef, useState } from "react";
-import { Pressable, useWindowDimensions, View } from "react-native";
+import { useCallback, useState } from "react";
+import { useWindowDimensions, View } from "react-native";
 import { LevelMeter } from "@/features/span/LevelMeter";
+import { meterLevel } from "@/features/span/meterLevel";
 import { PitchTrail, TrailLegend } from "@/features/span/PitchTrail";
-import { Icon } from "@/features/ui/Icon";
 import { Screen } from "@/features/ui/Screen";
+import { StopButton } from "@/features/ui/StopButton";
 import { Text } from "@/features/ui/Text";
 import { colors, mixtures, sizes } from "@/features/ui/theme";
 import { useLayout } from "@/features/ui/useLayout";
@@ -51,7 +52,7 @@ export function ListeningScreen({ live, seconds, stopping, onStop }: ListeningSc
       <Text variant="small" tone="soft" style={{ marginTop: -6, paddingLeft: 56 }}>
         {`${enoughTakeS} s is enough. More is surer, up to ${longestTakeS} s.`}
       </Text>
-      <StopButton stopping={stopping} onStop={onStop} />
+      <StopButton stopping={stopping} onStop={onStop} round={layout !== "phone"} />
     </>
   );
   if (layout === "wide") {
@@ -140,8 +141,7 @@ function LiveTrail({ live, height }: { live: LiveSound; height: number }) {
 }
 
 function LiveLevel({ live }: { live: LiveSound }) {
-  // A cut-off peak is too loud, however soft the block around it. The meter shows steps of 2.5 dB.
-  const levelDb = useHeard(live, ({ peak, levelDb: now }) => (peak >= 0.99 ? 0 : Math.round(now / 2.5) * 2.5));
+  const levelDb = useHeard(live, meterLevel);
   return <LevelMeter levelDb={levelDb} />;
 }
 
@@ -184,35 +184,5 @@ function TimeRow({ seconds }: { seconds: number }) {
         {`${Math.floor(seconds)} s`}
       </Text>
     </View>
-  );
-}
-
-/** It has the focus while listening, so that Space or Enter ends the take. */
-function StopButton({ stopping, onStop }: { stopping: boolean; onStop: () => void }) {
-  const phone = useLayout() === "phone";
-  const button = useRef<View>(null);
-  useEffect(() => button.current?.focus(), []);
-  return (
-    <Pressable
-      ref={button}
-      role="button"
-      onPress={onStop}
-      disabled={stopping}
-      testID="sing-stop"
-      style={{
-        height: 64,
-        borderRadius: phone ? sizes.radius : 999,
-        backgroundColor: colors.plum,
-        flexDirection: "row",
-        alignItems: "center",
-        justifyContent: "center",
-        gap: 10,
-      }}
-    >
-      <Icon name="stop" size={26} color={colors.onPlum} />
-      <Text variant="strong" tone="onPlum" style={{ fontSize: 20, lineHeight: 24 }}>
-        {stopping ? "Stopping" : "Stop"}
-      </Text>
-    </Pressable>
   );
 }

@@ -1,10 +1,10 @@
-import { useCallback, useEffect, useMemo, useRef, useState, useSyncExternalStore, type ReactNode } from "react";
-import { Pressable, useWindowDimensions, View } from "react-native";
+import { useCallback, useMemo, useState, useSyncExternalStore, type ReactNode } from "react";
+import { useWindowDimensions, View } from "react-native";
 import { LevelMeter } from "@/features/span/LevelMeter";
-import { Icon } from "@/features/ui/Icon";
+import { meterLevel } from "@/features/span/meterLevel";
 import { Screen } from "@/features/ui/Screen";
+import { StopButton } from "@/features/ui/StopButton";
 import { Text } from "@/features/ui/Text";
-import { colors } from "@/features/ui/theme";
 import { useLayout } from "@/features/ui/useLayout";
 import type { Song } from "@/shared/contract/song";
 import type { KeyName } from "@/shared/music/keyName";
@@ -100,40 +100,7 @@ function Road(props: Omit<Parameters<typeof TryRoad>[0], "width">) {
   );
 }
 
-/** The meter shows steps of 2.5 dB; a cut-off peak is too loud, however soft the block around it. */
 function Level({ recorder: { listen, now } }: { recorder: TryRecorder }) {
-  const read = useCallback(() => {
-    const { peak, levelDb } = now();
-    return peak >= 0.99 ? 0 : Math.round(levelDb / 2.5) * 2.5;
-  }, [now]);
+  const read = useCallback(() => meterLevel(now()), [now]);
   return <LevelMeter levelDb={useSyncExternalStore(listen, read)} labelled />;
-}
-
-/** It has the focus while listening, so that Space or Enter ends the take. */
-function StopButton({ stopping, onStop, round }: { stopping: boolean; onStop: () => void; round: boolean }) {
-  const button = useRef<View>(null);
-  useEffect(() => button.current?.focus(), []);
-  return (
-    <Pressable
-      ref={button}
-      role="button"
-      onPress={onStop}
-      disabled={stopping}
-      testID="sing-stop"
-      style={{
-        height: 64,
-        borderRadius: round ? 999 : 14,
-        backgroundColor: colors.plum,
-        flexDirection: "row",
-        alignItems: "center",
-        justifyContent: "center",
-        gap: 10,
-      }}
-    >
-      <Icon name="stop" size={26} color={colors.onPlum} />
-      <Text variant="strong" tone="onPlum" style={{ fontSize: 20, lineHeight: 24 }}>
-        {stopping ? "Stopping" : "Stop"}
-      </Text>
-    </Pressable>
-  );
 }

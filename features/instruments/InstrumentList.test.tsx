@@ -26,7 +26,7 @@ test("the instrument one plays is kept, and only one is", async () => {
   fireEvent.click((await card("guitar")).getByRole("button", { name: /^I play this/ }));
   await screen.findByText(/Ways are found for Guitar first/);
   fireEvent.click((await card("ukulele")).getByRole("button", { name: /^I play this/ }));
-  await screen.findByText(/Ways are found for Ukulele first/);
+  await screen.findByText(/Ways are found for Concert ukulele first/);
   const favourites = (await shelf.list("instruments")).filter((own) => own.favourite);
   expect(favourites.map((own) => own.presetId)).toEqual(["ukulele"]);
 });

@@ -1,7 +1,9 @@
 import { z } from "zod";
 
+const note = z.string().regex(/^[A-G](#|b)?-?\d$/, "Name a string like A3 or F#4.");
+
 const instrumentString = z.strictObject({
-  note: z.string().regex(/^[A-G](#|b)?-?\d$/, "Name a string like A3 or F#4."),
+  note,
   gaugeIn: z.number().positive().max(0.3).nullable(),
   material: z.enum([
     "plain-steel",
@@ -14,6 +16,10 @@ const instrumentString = z.strictObject({
   ]),
   scaleMm: z.number().min(100).max(2000).exactOptional(),
   startsAtFret: z.int().min(1).max(12).exactOptional(),
+  /** note its set was made for, where it is kept at another one */
+  madeFor: note.exactOptional(),
+  /** strings of this kind side by side */
+  inCourse: z.int().min(2).max(3).exactOptional(),
 });
 
 /** An instrument of one's own, kept in full so that it outlives its preset. */

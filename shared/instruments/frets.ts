@@ -34,6 +34,26 @@ export function fretSpanMm(scaleMm: number, lower: number, higher: number): numb
 /** Semitones within an octave that a diatonic fretboard counts by whole numbers: the scale with a flat seventh. */
 const counted = new Set([0, 2, 4, 5, 7, 9, 10]);
 
+/** The scale with a flat seventh, and the fret between its sixth step and the seventh that players call 6½. */
+const diatonicSteps = [2, 4, 5, 7, 9, 10, 12];
+const sixAndAHalf = 11;
+
+/**
+ * Fret map of a diatonic fretboard.
+ *
+ * @param count how many frets it has, >= 0
+ * @param withHalf with the 6½ in every octave
+ * @returns semitones above the open string at each fret, from the nut
+ * @throws RangeError if the count is not whole or negative
+ * @see common practice of makers of mountain dulcimers: 0 2 4 5 7 9 10 12, and 11 for the 6½
+ * @example diatonicFrets(8, true) // => [2, 4, 5, 7, 9, 10, 11, 12]
+ */
+export function diatonicFrets(count: number, withHalf: boolean): number[] {
+  if (!Number.isInteger(count) || count < 0) throw new RangeError("count must be a whole number of frets");
+  const steps = withHalf ? [...diatonicSteps, sixAndAHalf].sort((a, b) => a - b) : diatonicSteps;
+  return Array.from({ length: count }, (_, k) => 12 * Math.floor(k / steps.length) + steps[k % steps.length]!);
+}
+
 /**
  * What players call a fret. On a diatonic fretboard the frets of the scale are counted, and one between two of them is
  * the half after the lower: 6½ lies between 6 and 7.

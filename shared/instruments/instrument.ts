@@ -13,6 +13,10 @@ export interface InstrumentString {
   scaleMm?: number;
   /** fret of the main strings at which a short string's nut stands; it cannot be stopped below */
   startsAtFret?: number;
+  /** note its set was made for, where it is kept at another one; decides how far it may be tuned */
+  madeFor?: string;
+  /** how many strings of this kind stand side by side here and sound as one; 1 when absent */
+  inCourse?: number;
 }
 
 /** An instrument in one tuning. Strings in playing order, from the bass side of the neck to the treble side. */

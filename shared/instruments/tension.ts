@@ -105,24 +105,39 @@ export function breakingHz(gaugeIn: number, scaleIn: number): number {
 }
 
 /**
- * Judges one string at another pitch. Down: slack below 72 % of its ordinary tension. Up: one semitone is tight, more
- * is unsafe for wound strings and for those whose gauge is not known; a plain steel string may go up to 75 % of the
- * strength of the weakest wire.
+ * Judges one string at another pitch, from the note its set was made for. Slack below 72 % of the tension it has there.
+ * Above that note one semitone is tight, more is unsafe for wound strings and for those whose gauge is not known; a
+ * plain steel string may go up to 75 % of the strength of the weakest wire. What is left or let down is never unsafe.
  *
- * @param string as it is tuned now, taken to be the note its set was made for
+ * @param string as it is tuned now, and what it was made for where that is another note
  * @param scaleMm scale length of the instrument in mm
  * @param semitones shift, whole, negative for down
  * @returns verdict; "unsafe" must never be proposed
  * @throws RangeError if the string has no readable note
  * @see common practice for the slack floor and the upper limits; ASTM A228/A228M for the strength of plain steel
+ * @example retuneVerdict({ note: "A2", gaugeIn: 0.042, material: "phosphor-bronze" }, 648, 2) // => "unsafe"
  */
 export function retuneVerdict(string: InstrumentString, scaleMm: number, semitones: number): RetuneVerdict {
-  if (semitones > 0) {
+  const above = abovePacket(string) + semitones;
+  if (semitones > 0 && above > 0) {
     const load = plainLoad(string, scaleMm, semitones);
-    if (load === null) return semitones >= neverUpBy ? "unsafe" : "tight";
+    if (load === null) return above >= neverUpBy ? "unsafe" : "tight";
     return load > plainCap ? "unsafe" : "tight";
   }
-  return tensionRatio(semitones) < slackBelow ? "slack" : "fine";
+  if (above > 0) return "tight";
+  return tensionRatio(above) < slackBelow ? "slack" : "fine";
+}
+
+/**
+ * How far a string is kept from the note its set was made for.
+ *
+ * @param string as it is tuned now
+ * @returns semitones, negative where it is kept lower
+ * @throws RangeError if a note cannot be read
+ * @example abovePacket({ note: "D2", madeFor: "E2" }) // => -2
+ */
+export function abovePacket({ note, madeFor = note }: Pick<InstrumentString, "note" | "madeFor">): number {
+  return stringMidi({ note }) - stringMidi({ note: madeFor });
 }
 
 /**

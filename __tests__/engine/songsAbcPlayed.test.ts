@@ -80,8 +80,15 @@ const differences: Record<string, Difference> = {
     told: [[/\|\|(?=\[L)/, "|:"]],
   },
   "sample2.abc 2": {
-    why: "M:2 is no metre (3.1.6 asks for a fraction): two halves to abc2midi, two quarters to us.",
-    told: [[/^M:2$/m, "M:2/4"]],
+    why: "M:2 is no metre (3.1.6 asks for a fraction): 2/2 to us as to its bars of four quarters, 2/1 to abc2midi.",
+    told: [[/^M:2$/m, "M:2/2"]],
+  },
+  "sample2.abc 6": {
+    why: "!D.C.! and !fine! (4.14) are followed by us, abc2midi does not know them: it is told the bars one by one.",
+    told: [
+      [/^(w:.*D\.C\..*)$/m, "$1\nCDEFGABc|CDEFGABc|"],
+      [/^.*\n(?=w:pralltriller)/m, ""],
+    ],
   },
   "sample3.abc 1": {
     why: "An ending named by words is abcm2ps's own (4.9 knows numbers), a chord symbol to abc2midi.",

@@ -1,6 +1,6 @@
 import type { AbcClef } from "./abcKey";
 import type { WordPlace } from "./abcWords";
-import type { MeasureSigns } from "./repeats";
+import type { ScoreSigns } from "./scoreSigns";
 
 /** A note of ABC notation inside its bar; times in quarter notes. */
 export interface AbcNote {
@@ -17,7 +17,7 @@ export interface AbcBarText {
   notes: AbcNote[];
   words: (WordPlace & { start: number })[];
   length: number;
-  signs: MeasureSigns & { section?: boolean };
+  signs: ScoreSigns & { section?: boolean };
   part: string;
 }
 
@@ -29,6 +29,8 @@ export interface AbcSetting {
   unit: number;
   bar: number | null;
   compound: boolean;
+  /** what single letters stand for, such as S for !segno! */
+  symbols: Readonly<Record<string, string>>;
   clef: Required<Omit<AbcClef, "name">>;
 }
 

@@ -189,6 +189,42 @@ describe("ABC tunes in full", () => {
     ["from the latest double bar, where no beginning stands", "C|D||E|F:|G|]", [60, 62, 64, 65, 64, 65, 67]],
   ])("repeats %s", (_, body, expected) => expect(pitches(body)).toEqual(expected));
 
+  test.each([
+    ["D.C.", "C|D|E!D.C.!|]", "CDECDE"],
+    ["D.C. al Fine in words", 'C|"^Fine"D|E"^D.C. al Fine"|]', "CDECD"],
+    ["D.S. al Fine", "C|!segno!D|!fine!E|F!D.S.!|]", "CDEFDE"],
+    ["a segno on the bar line before", "C!segno!|D!fine!|E!D.S.!|]", "CDED"],
+    ["D.S. al Coda by two coda signs", "C|!segno!D!coda!|E!D.S.alcoda!|!coda!F|]", "CDEDF"],
+    ["da coda by its words", "C|D!dacoda!|E!D.C.!|!coda!F|]", "CDECDF"],
+    ["the letters S and O", "C|SDO|E+D.S.+|OF|]", "CDEDF"],
+    ["letters of one's own", "C|TD|E!fine!|F!D.S.!|]", "CDEFDE", "U:T=!segno!\nL:1/4\nK:C"],
+    ["D.C. behind the last bar line", "C|D!fine!|E|] !D.C.!", "CDECD"],
+    ["no repeat a second time", "|:C!fine!|1D:|2E|F!D.C.!|]", "CDCEFC"],
+    ["not where P: gives the order", "P:A\nC|D!D.C.!|\nP:B\nE|", "CDECD", "P:ABA\nL:1/4\nK:C"],
+  ])("follows %s", (_, body, expected, head = "L:1/4\nK:C") => {
+    const letters = "C.D.EF";
+    expect(
+      pitches(body, head)
+        .map((midi) => letters[midi - 60])
+        .join(""),
+    ).toBe(expected);
+  });
+
+  test("jumps written into the first voice only are made by all, each with its own notes", () => {
+    const file = read("x.abc", "X:1\nL:1/4\nK:C\nV:1\nC|D!fine!|E!D.C.!|\nV:2\nE|F|G|\n");
+    expect(file.voices.map(({ melody }) => melody.notes.map(({ midi }) => midi))).toEqual([
+      [60, 62, 64, 60, 62],
+      [64, 65, 67, 64, 65],
+    ]);
+  });
+
+  test.each([
+    ["M:2", "two halves", 4],
+    ["M:3", "three quarters", 3],
+  ])("a bar's rest under %s lasts %s (common practice for a lone figure)", (metre, _, quarters) =>
+    expect(voiceOf("Z|C|", `${metre}\nL:1/4\nK:C`).melody.notes[0]!.start).toBe(quarters),
+  );
+
   test("parts are played in the order of the head", () => {
     expect(pitches("P:A\nC|\nP:B\nD|", "P:(AB)2A\nL:1/4\nK:C")).toEqual([60, 62, 60, 62, 60]);
   });

@@ -5,6 +5,7 @@ import { type AbcBarText, AbcTooLarge } from "./abcBars";
 import type { MelodyNote } from "./melody";
 import { type MelodySyllable, type WrittenFile, type WrittenVoice, laterChanges } from "./melodyVoice";
 import { playingOrder } from "./repeats";
+import { placeCodas } from "./scoreSigns";
 
 const most = { characters: 500_000, tunes: 200, notes: 100_000 };
 /** Fine enough for tuplets of 3, 5, 7 and 9 down to a sixty-fourth; undoes the error of adding thirds. */
@@ -16,8 +17,8 @@ const tooLarge: WrittenFile = {
 
 /**
  * Reads tunes in ABC notation: ties joined, repeats, endings and the order of parts unrolled, grace notes and ornaments
- * left out, octave clefs and transposing voices as they sound. Words marked D.C. or D.S. are not followed, because the
- * standard gives them no meaning for a player.
+ * left out, octave clefs and transposing voices as they sound. D.C. and D.S. are followed, al fine and al coda, except where P: gives
+ * the order of the parts.
  *
  * @param text the file's text; several tunes (X:) become several voices
  * @returns the voices as written, or why the text cannot be read
@@ -68,8 +69,9 @@ function playTune(tune: AbcTune, several: boolean): WrittenVoice[] {
   return parts.flatMap((part, index) => {
     const { bars } = part.voice;
     // Some write repeats into the first voice only.
-    const bare = bars.every(({ signs }) => !signs.repeatEnd && !signs.endingStart) && bars.length === first.length;
-    const order = orderOf(bare ? first : bars, tune.order);
+    const same = bars.length === first.length;
+    const bare = bars.every(({ signs }) => !signs.repeatEnd && !signs.endingStart && !signs.jump) && same;
+    const order = orderOf(bare ? first : same ? withJumps(bars, first) : bars, tune.order);
     const fallback = parts.length > 1 ? `Voice ${index + 1}` : (tune.title ?? "Tune");
     const own = part.name ?? fallback;
     const name = several && tune.title !== null && own !== tune.title ? `${tune.title}, ${own}` : own;
@@ -79,7 +81,7 @@ function playTune(tune: AbcTune, several: boolean): WrittenVoice[] {
 
 /** Indices of the bars in the order they are played. */
 function orderOf(bars: readonly AbcBarText[], parts: string | null): number[] {
-  const signs = withStarts(bars);
+  const signs = placeCodas(withStarts(bars));
   const labels = new Set(bars.map((bar) => bar.part));
   const wanted = parts === null || labels.size < 2 ? null : abcPartOrder(parts);
   if (parts !== null && labels.size >= 2 && wanted === null) throw new AbcTooLarge();
@@ -92,10 +94,24 @@ function orderOf(bars: readonly AbcBarText[], parts: string | null): number[] {
   if (labels.has("")) sections.unshift("");
   return sections.flatMap((label) => {
     const places = bars.flatMap((bar, index) => (bar.part === label ? [index] : []));
-    const order = playingOrder(places.map((place) => signs[place]!));
+    // The order of the parts says all: a jump would be a second one.
+    const order = playingOrder(places.map((place) => withoutJump(signs[place]!)));
     if (!order) throw new AbcTooLarge();
     return order.map((place) => places[place]!);
   });
+}
+
+/** Bars with the jumps that stand in the first voice only. */
+function withJumps(bars: readonly AbcBarText[], first: readonly AbcBarText[]): readonly AbcBarText[] {
+  if (bars.some(({ signs }) => signs.jump)) return bars;
+  return bars.map((bar, index) => {
+    const { repeatStart, repeatEnd, endingStart, endingEnd, section, ...jumps } = first[index]!.signs;
+    return { ...bar, signs: { ...jumps, ...bar.signs } };
+  });
+}
+
+function withoutJump({ jump, ...signs }: AbcBarText["signs"]): AbcBarText["signs"] {
+  return signs;
 }
 
 /** A repeat without beginning starts at the latest double bar, repeat or beginning (standard 2.1, section 4.8). */

@@ -1,4 +1,5 @@
 import type { AbcTuneText } from "./abcBook";
+import { abcSymbols, readAbcSymbol } from "./abcJumps";
 import { type AbcKey, readAbcClef, readAbcKey } from "./abcKey";
 import type { AbcSetting } from "./abcBars";
 import { type AbcVoice, createAbcVoice } from "./abcVoice";
@@ -57,6 +58,7 @@ export function readAbcTune(text: AbcTuneText): AbcTune {
     unit: 0,
     bar: 4,
     compound: false,
+    symbols: abcSymbols,
     clef: { octaves: 0, clefOctaves: 0, semitones: 0, percussion: false },
   };
   let metre: string | null = null;
@@ -70,6 +72,7 @@ export function readAbcTune(text: AbcTuneText): AbcTune {
     else if (letter === "L") setting = { ...setting, unit: unitOf(said) ?? setting.unit };
     else if (letter === "Q") tune.tempo ??= tempoOf(said, setting.unit || 0.5);
     else if (letter === "P") tune.order = said;
+    else if (letter === "U") setting = { ...setting, symbols: readAbcSymbol(said, setting.symbols) };
     else if (letter === "V") about.set(said.trim().split(/\s+/)[0] ?? "", said);
     else if (letter === "K") {
       const read = readAbcKey(said);
@@ -115,6 +118,11 @@ export function readAbcTune(text: AbcTuneText): AbcTune {
     }
     if (letter === "P") {
       part = said.trim();
+      return;
+    }
+    if (letter === "U") {
+      setting = { ...setting, symbols: readAbcSymbol(said, setting.symbols) };
+      for (const { voice } of tune.parts) voice.setting = { ...voice.setting, symbols: setting.symbols };
       return;
     }
     here ??= enter("1");
@@ -207,7 +215,8 @@ function metreOf(said: string): Pick<AbcSetting, "bar" | "compound"> {
   if (/^\s*C/.test(said)) return { bar: 4, compound: false };
   const found = /^\s*\(?([\d\s+]{1,20})\)?\s*(?:\/\s*(\d{1,3}))?/.exec(said);
   const beats = found ? sum(found[1]!) : 0;
-  const bar = found ? (4 * beats) / Number(found[2] ?? 4) : NaN;
+  // A lone 2 is two halves, a lone 3 three quarters (common practice).
+  const bar = found ? (4 * beats) / Number(found[2] ?? (beats === 2 ? 2 : 4)) : NaN;
   if (!Number.isFinite(bar) || bar <= 0 || bar > 64) return { bar: null, compound: false };
   return { bar, compound: beats % 3 === 0 && beats > 3 && found?.[2] === "8" };
 }
@@ -215,7 +224,7 @@ function metreOf(said: string): Pick<AbcSetting, "bar" | "compound"> {
 function beatsOf(said: string): number | null {
   if (/^\s*C\|/.test(said)) return 2;
   if (/^\s*C/.test(said)) return 4;
-  const found = /^\s*\(?([\d\s+]{1,20})\)?\s*\//.exec(said);
+  const found = /^\s*\(?([\d\s+]{1,20})\)?\s*(?:\/|$)/.exec(said);
   return found ? sum(found[1]!) || null : null;
 }
 

@@ -1,4 +1,5 @@
 import { type AbcBarText, type AbcNote, type AbcSetting, AbcTooLarge } from "./abcBars";
+import { createAbcJumpPlaces, readAbcJumps } from "./abcJumps";
 import { readAbcBar, readAbcEnding, readAbcLength, readAbcTuplet } from "./abcSigns";
 import type { WordPlace } from "./abcWords";
 
@@ -20,7 +21,8 @@ const letters: Record<string, number> = { C: 0, D: 2, E: 4, F: 5, G: 7, A: 9, B:
 const signs: Record<string, number> = { "^^": 2, "^": 1, "=": 0, _: -1, __: -2 };
 const note = /(?:(\^\^?|__?|=)(\d*\/*\d*))?([A-Ga-g])([,']*)(\d*\/*\d*)/y;
 const tokens = {
-  skipped: /(?:[\s`*$]|y\d*|"[^"]*"?|![^!\s]{1,40}!|\+[A-Za-z0-9.()<>^]{1,30}\+|\{[^}]*\}?|\[\])+/y,
+  skipped:
+    /(?:[\s`*$]|y\d*|"[^"]*"?|![^!\s]{1,40}!|!D\.[CS]\.[^!]{1,20}!|\+[A-Za-z0-9.()<>^]{1,30}\+|\{[^}]*\}?|\[\])+/y,
   bar: /\.?(?:\[(?=\|)|[|:]|(?<=\|)\])+/y,
   ending: /\[?\s*(\d[\d,.-]*)/y,
   tuplet: /\((\d+(?::\d*){0,2})/y,
@@ -50,6 +52,7 @@ export function createAbcVoice(setting: AbcSetting): AbcVoice {
   let nextFactor = 1;
   let tuplets: { factor: number; left: number }[] = [];
   const tiedPitches = new Map<string, number>();
+  const jumps = createAbcJumpPlaces();
   const count = { notes: 0, overlays: 0, quarters: 0 };
 
   const openBar = (part: string) => {
@@ -98,6 +101,7 @@ export function createAbcVoice(setting: AbcSetting): AbcVoice {
   let names: [string, number][] = [];
 
   const place = (length: number, notes: { midi: number; length: number; tied: boolean }[]) => {
+    jumps.sound(bar.signs);
     const duration = step(length);
     const factor = duration / length;
     const placed = notes
@@ -135,6 +139,7 @@ export function createAbcVoice(setting: AbcSetting): AbcVoice {
     if (sign === ":") return;
     closeBar();
     const before = voice.bars.at(-1);
+    const arriving = jumps.pass(before?.signs);
     if (before && timesBefore > 1) before.signs.repeatEnd = timesBefore;
     if (before && inEnding && section) {
       before.signs.endingEnd = true;
@@ -142,7 +147,7 @@ export function createAbcVoice(setting: AbcSetting): AbcVoice {
     }
     const opened = bar.length === 0 && bar.notes.length === 0 ? bar.signs : {};
     openBar(part);
-    bar.signs = opened;
+    bar.signs = { ...opened, ...arriving };
     if (repeatAfter) bar.signs.repeatStart = true;
     if (section) bar.signs.section = true;
   };
@@ -205,6 +210,7 @@ export function createAbcVoice(setting: AbcSetting): AbcVoice {
     }
     const bars = text === "" ? 1 : Number(text);
     if (!(bars <= 2_000)) throw new AbcTooLarge();
+    jumps.sound(bar.signs);
     now += bars * (voice.setting.bar ?? 4);
     last = null;
   };
@@ -230,8 +236,10 @@ export function createAbcVoice(setting: AbcSetting): AbcVoice {
       let at = 0;
       while (at < text.length) {
         let found: RegExpExecArray | null;
-        if (matchAt(tokens.skipped, text, at)) at = tokens.skipped.lastIndex;
-        else if ((found = matchAt(tokens.note, text, at))) {
+        if ((found = matchAt(tokens.skipped, text, at))) {
+          at = tokens.skipped.lastIndex;
+          jumps.stand(readAbcJumps(found[0]));
+        } else if ((found = matchAt(tokens.note, text, at))) {
           at = tokens.note.lastIndex;
           const [, sign, fraction = "", letter, octave, length] = found;
           const midi = pitch(sign, fraction, letter!, octave!);
@@ -265,12 +273,14 @@ export function createAbcVoice(setting: AbcSetting): AbcVoice {
           tie();
         } else {
           if (text[at] === "&") overlay();
+          else jumps.stand(readAbcJumps(voice.setting.symbols[text[at]!] ?? ""));
           at += 1;
         }
       }
     },
     end() {
       closeBar();
+      jumps.pass(voice.bars.at(-1)?.signs);
       openBar("");
     },
   };

@@ -1,10 +1,5 @@
-import type { MeasureSigns } from "./repeats";
+import { type ScoreSigns, readJumpWords } from "./scoreSigns";
 import { type XmlElement, child, childrenOf } from "./xmlTree";
-
-/** Signs of a measure, with those codas of which only the whole score tells whether one leaves there or arrives. */
-export interface ScoreSigns extends MeasureSigns {
-  codaSign?: boolean;
-}
 
 /**
  * Reads what a bar line says to a player.
@@ -50,29 +45,6 @@ export function readDirection(element: XmlElement, signs: ScoreSigns): void {
   for (const kind of childrenOf(element, "direction-type")) {
     if (child(kind, "segno")) signs.segno = true;
     if (child(kind, "coda")) signs.codaSign = true;
-    for (const { text } of childrenOf(kind, "words")) {
-      if (/^\s*(?:D\.?\s?C\b|da capo)/i.test(text)) signs.jump ??= "da capo";
-      if (/^\s*(?:D\.?\s?S\b|dal segno)/i.test(text)) signs.jump ??= "dal segno";
-      if (/^\s*fine\b/i.test(text)) signs.fine = true;
-      if (/^\s*to coda\b/i.test(text)) signs.toCoda = true;
-    }
+    for (const { text } of childrenOf(kind, "words")) Object.assign(signs, { ...readJumpWords(text), ...signs });
   }
-}
-
-/**
- * Tells of coda signs that no sound explains where one leaves and where the coda begins: the first of two is left at.
- *
- * @param signs signs of all measures, in order
- * @returns the same with the coda signs placed
- * @see common practice
- */
-export function placeCodas(signs: readonly ScoreSigns[]): ScoreSigns[] {
-  const marked = signs.flatMap((each, index) => (each.codaSign && !each.toCoda ? [index] : []));
-  const leaves = signs.some((each) => each.toCoda) || marked.length < 2 ? -1 : marked[0]!;
-  const arrives = signs.some((each) => each.coda) ? -1 : (marked.at(-1) ?? -1);
-  return signs.map((each, index) => ({
-    ...each,
-    ...(index === leaves ? { toCoda: true } : {}),
-    ...(index === arrives && index !== leaves ? { coda: true } : {}),
-  }));
 }

@@ -1,8 +1,8 @@
 import type { MelodyNote } from "./melody";
 import { type MelodySyllable, type WrittenFile, type WrittenVoice, laterChanges } from "./melodyVoice";
-import { placeCodas } from "./musicXmlJumps";
 import { type PartText, type ScoreNote, readPart } from "./musicXmlPart";
 import { type MeasureSigns, playingOrder } from "./repeats";
+import { placeCodas } from "./scoreSigns";
 import { type XmlElement, child, childNumber, childrenOf, parseXml } from "./xmlTree";
 
 const mostNotes = 100_000;

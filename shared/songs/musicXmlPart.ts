@@ -1,6 +1,7 @@
 import { type KeyName, type Mode, keyOfFifths } from "../music/keyName";
 import type { MelodyNote } from "./melody";
-import { type ScoreSigns, readBarline, readDirection } from "./musicXmlJumps";
+import { readBarline, readDirection } from "./musicXmlJumps";
+import type { ScoreSigns } from "./scoreSigns";
 import { type XmlElement, child, childNumber, childrenOf } from "./xmlTree";
 
 /** A note of a score inside its measure; times in quarter notes. */

@@ -48,8 +48,10 @@ const mode = (page: Page, name: string) => page.getByRole("radio", { name, exact
 
 async function writeSong(page: Page, viewport: Viewport): Promise<void> {
   await page.goto("/songs/new");
-  await page.getByTestId("song-title").fill("Slack Water");
-  await page.getByTestId("song-chart").fill(pasted);
+  // The line over a whole song is its title.
+  await page.getByTestId("song-chart").fill(`Slack Water\n\n${pasted}`);
+  expect(await page.getByTestId("song-title").inputValue()).toBe("Slack Water");
+  expect(await chart(page)).toBe(pasted);
   const preview = page.getByTestId("preview");
   await preview.getByText("slack").first().waitFor();
   await preview.getByRole("heading", { name: /Chorus/ }).waitFor();
@@ -92,6 +94,11 @@ test.each(["phone", "wide"] as const)(
     await kept(page);
     await page.reload();
     await page.getByTestId("kept-words").waitFor();
+    expect(await chart(page)).toBe(placed);
+    // The way back outlives the reload too.
+    await page.getByTestId("undo").click();
+    expect(await chart(page)).toBe(pasted);
+    await page.getByTestId("redo").click();
     expect(await chart(page)).toBe(placed);
 
     if (viewport === "phone") await mode(page, "Parts");

@@ -4,6 +4,7 @@ import type { z } from "zod";
 import { decision } from "../../shared/contract/decision";
 import { ownInstrument } from "../../shared/contract/instrument";
 import { song } from "../../shared/contract/song";
+import { songVersionEntry } from "../../shared/contract/songVersion";
 import { take } from "../../shared/contract/take";
 import { voice } from "../../shared/contract/voice";
 import { demoSongs } from "../../shared/songs/demoSongs";
@@ -58,6 +59,9 @@ it("gives everybody of the class a voice, takes, the songs, keys for two of them
     expect(takes.length).toBeGreaterThan(0);
     expect(songs.map((one) => one.demo).sort()).toEqual(demoSongs.map(({ id }) => id).sort());
     expect(songs.every(({ tune }) => tune?.kind === "melody")).toBe(true);
+    const lantern = songs.find((one) => one.demo === "lantern")!;
+    const versions = await list(`songs/${lantern.id}/versions`, songVersionEntry);
+    expect(versions.map(({ by }) => by)).toEqual([email, email]);
     expect(decisions).toHaveLength(2);
     expect(instruments).toHaveLength(1);
     for (const { range, comfort } of takes) {

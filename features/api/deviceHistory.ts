@@ -37,9 +37,18 @@ async function keep(items: DeviceItems, song: Song, always: boolean): Promise<vo
   items.set(keyOf(song.id), history);
 }
 
+/** Gives a song that comes to this device the states it had before, the oldest first. */
+function bring(items: DeviceItems, songId: string, states: readonly Omit<SongVersion, "id">[]): void {
+  if (states.length === 0) return;
+  const versions = states.map((state) => ({ ...state, id: newId(), keptAt: state.savedAt })).reverse();
+  const history: History = { changedAt: new Date().toISOString(), versions };
+  items.set(keyOf(songId), history);
+}
+
 /** Earlier states of a visitor's songs, on this device. */
 export const deviceHistory = {
   keep,
+  bring,
   async read(items: Pick<DeviceItems, "get">, songId: string): Promise<SongVersion[]> {
     const known = (await items.get(keyOf(songId))) as History | undefined;
     return (known?.versions ?? []).map(({ keptAt: _keptAt, ...version }) => version);

@@ -11,6 +11,8 @@ import { changedElsewhere, completeSong, sameContent, sameSong } from "./songRev
 export interface DeviceShelf extends Shelf {
   /** Lets go of one item, unless it was changed since it was read. */
   release<C extends Collection>(name: C, item: Items[C]): Promise<boolean>;
+  /** Puts a song of the demonstration here, with its earlier states, the oldest first; nothing where it is already. */
+  seed(song: Items["songs"], earlier: readonly Omit<SongVersion, "id">[]): Promise<void>;
   /** A copy of the demonstration exactly as it was first put here. */
   isAsSeeded(song: Items["songs"]): Promise<boolean>;
   /** Earlier states of a song, newest first. */
@@ -139,6 +141,12 @@ function createDeviceShelf(storage: DeviceStorage): DeviceShelf {
         items.delete(keyOf(name, item.id));
         if (name === "songs") deviceHistory.forget(items, item.id);
         return true;
+      }),
+    seed: (song, earlier) =>
+      storage.change(async (items) => {
+        if ((await items.get(keyOf("songs", song.id))) !== undefined) return;
+        await putSong(items, song, false);
+        deviceHistory.bring(items, song.id, earlier);
       }),
     async isAsSeeded(song) {
       const { demo } = song;

@@ -20,6 +20,7 @@ import { listingColumns } from "../songs/listingColumns";
 import { SongEntity } from "../songs/song.entity";
 import { TakeEntity } from "../voices/take.entity";
 import { VoiceEntity } from "../voices/voice.entity";
+import { bringDemoVersions } from "./demoVersions";
 import { demoPassword, demoPeople, type DemoPerson } from "./demoPeople";
 
 /** How to get into the accounts of the demonstration. */
@@ -74,6 +75,7 @@ async function move(manager: EntityManager, person: DemoPerson, passwordHash: st
     SongEntity,
     songs.map((song) => ({ ...song, ...listingColumns(song), userId })),
   );
+  await bringDemoVersions(manager, userId, songs);
   // Keys are decided for what the class is singing now; the rest of the shelf waits for its first visit.
   const decisions = songs.slice(0, 2).flatMap((song) => decide(song, voice, takes, instrument) ?? []);
   await manager.insert(

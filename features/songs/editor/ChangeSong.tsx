@@ -26,7 +26,7 @@ export function ChangeSong({ song, onDone }: { song: Song; onDone: () => void })
     const kept = draftStore.load(song.id);
     return { draft: kept?.draft ?? draftOf(song), base: kept?.base ?? null, restored: kept !== null };
   });
-  const { edits, wrong, placing, mode, form } = useEditor(start.draft);
+  const { edits, wrong, placing, mode, form } = useEditor(start.draft, song.id);
   const { draft, change } = edits;
   const { state, keep, settle } = useKeeping({
     song,

@@ -15,6 +15,7 @@ import { emptyDraft, newOrigin, songFromDraft } from "./songDraft";
 import { SongForm } from "./SongForm";
 import { keyOfDraft } from "./useChartReading";
 import { focusFirstWrong, useEditor } from "./useEditor";
+import { forgetSteps } from "./useSongEdits";
 import { WrongNotice } from "./WrongNotice";
 
 /** Writing a new song. What was typed and not kept is found again. */
@@ -26,6 +27,7 @@ export function NewSong({ onSaved }: { onSaved: (song: Song) => void }) {
   });
   const discard = () => {
     draftStore.clear(null, start.draft);
+    forgetSteps(null);
     setStart({ ...start, draft: emptyDraft, restored: false, version: start.version + 1 });
   };
   return <Writing key={start.version} start={start} onDiscard={discard} onSaved={onSaved} />;
@@ -40,7 +42,7 @@ interface WritingProps {
 function Writing({ start, onDiscard, onSaved }: WritingProps) {
   const phone = useLayout() === "phone";
   const save = useSaveSong();
-  const editor = useEditor(start.draft);
+  const editor = useEditor(start.draft, null);
   const { edits, wrong, placing, mode, form } = editor;
   const { draft } = edits;
   const [asked, setAsked] = useState(false);
@@ -60,6 +62,7 @@ function Writing({ start, onDiscard, onSaved }: WritingProps) {
     save.mutate(songFromDraft(draft, found, newOrigin(start.id, new Date().toISOString())), {
       onSuccess: (song) => {
         draftStore.clear(null, draft);
+        forgetSteps(null);
         onSaved(song);
       },
     });

@@ -8,6 +8,7 @@ import { TuneFields } from "../melody/TuneFields";
 import { caretRow } from "./chartBox";
 import { ChartPreview } from "./ChartPreview";
 import { KeyChooser } from "./KeyChooser";
+import { pastedSong } from "./pastedSong";
 import { PartList } from "./parts/PartList";
 import { PlaceBar } from "./place/PlaceBar";
 import { PlaceChords } from "./place/PlaceChords";
@@ -44,6 +45,7 @@ export function SongForm({ edits, reading, errors, mode, onMode, placing, chartB
   const phone = layout === "phone";
   const wide = layout === "wide";
   const [row, setRow] = useState<number | null>(null);
+  const [takenTitle, setTakenTitle] = useState<string | null>(null);
   useEffect(() => {
     const follow = () => {
       if (chartBox.current?.contains(document.activeElement)) setRow(caretRow(chartBox.current));
@@ -52,6 +54,14 @@ export function SongForm({ edits, reading, errors, mode, onMode, placing, chartB
     return () => document.removeEventListener("selectionchange", follow);
   }, [chartBox]);
   const key = draft.key ?? finding?.key ?? null;
+  const onChart = (value: string) => {
+    const pasted = pastedSong(draft, value);
+    change({ chart: value }, pasted ? undefined : "chart");
+    if (!pasted) return;
+    // A step of its own: Undo gives back what was pasted.
+    change(pasted);
+    setTakenTitle(pasted.title ?? null);
+  };
   const onText = useRef((text: string) => change({ chart: text })).current;
 
   const text = (
@@ -75,7 +85,7 @@ export function SongForm({ edits, reading, errors, mode, onMode, placing, chartB
       <Field
         label="Chart, chords over lyrics"
         value={draft.chart}
-        onChangeText={(value) => change({ chart: value }, "chart")}
+        onChangeText={onChart}
         error={errors.chart}
         multiline
         mono
@@ -122,7 +132,12 @@ export function SongForm({ edits, reading, errors, mode, onMode, placing, chartB
   const keyCard = <KeyChooser finding={finding} chosen={draft.key} onChoose={(chosen) => change({ key: chosen })} />;
   const facts = (
     <View style={{ flexDirection: "row", flexWrap: "wrap", gap: 12 }}>
-      {text("title", "Title", { autoComplete: "off" })}
+      {text("title", "Title", {
+        autoComplete: "off",
+        ...(draft.title !== "" && draft.title === takenTitle
+          ? { hint: "Taken from what you pasted; Undo puts it back into the chart." }
+          : null),
+      })}
       {!phone && text("beatsPerBar", "Beats in a bar", { inputMode: "numeric" })}
       {!phone && text("tempo", "Beats a minute", { inputMode: "numeric", hint: "May stay empty" })}
     </View>

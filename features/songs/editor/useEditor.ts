@@ -20,9 +20,9 @@ export interface Editor {
   form: Omit<SongFormProps, "errors">;
 }
 
-/** One song being written: its steps, how it reads, and where one is in it. */
-export function useEditor(first: SongDraft): Editor {
-  const edits = useSongEdits(first);
+/** One song being written (`id` null: a new one): its steps, how it reads, and where one is in it. */
+export function useEditor(first: SongDraft, id: string | null): Editor {
+  const edits = useSongEdits(first, id);
   const { draft, change } = edits;
   const reading = useChartReading(draft);
   const key: KeyName | null = draft.key ?? reading.finding?.key ?? null;

@@ -1,5 +1,7 @@
-import { useCallback, useReducer } from "react";
-import { changeTo, redo, startHistory, undo, type EditHistory } from "./editHistory";
+import { useCallback, useEffect, useReducer } from "react";
+import { deviceDraft } from "../deviceDraft";
+import { changeTo, redo, undo, type EditHistory } from "./editHistory";
+import { packSteps, unpackSteps, type KeptSteps } from "./keptSteps";
 import type { SongDraft } from "./songDraft";
 
 type Act =
@@ -17,6 +19,13 @@ export interface SongEdits {
   canRedo: boolean;
 }
 
+const steps = deviceDraft<KeptSteps>("song-steps", "tab");
+
+/** Lets the steps of a song go: null for a new one. */
+export function forgetSteps(id: string | null): void {
+  steps.clear(id ?? "new");
+}
+
 function reduce(history: EditHistory<SongDraft>, act: Act): EditHistory<SongDraft> {
   if (act.kind === "undo") return undo(history);
   if (act.kind === "redo") return redo(history);
@@ -26,9 +35,13 @@ function reduce(history: EditHistory<SongDraft>, act: Act): EditHistory<SongDraf
   return changeTo(history, { ...present, ...act.changes }, act.tag, act.now);
 }
 
-/** What is typed and done to a song, with every step back and forth. */
-export function useSongEdits(first: SongDraft): SongEdits {
-  const [history, act] = useReducer(reduce, first, startHistory<SongDraft>);
+/** What is typed and done to a song, with every step back and forth; in one tab the latest outlive a reload. */
+export function useSongEdits(first: SongDraft, id: string | null): SongEdits {
+  const place = id ?? "new";
+  const [history, act] = useReducer(reduce, first, (draft) => unpackSteps(draft, steps.load(place)));
+  useEffect(() => {
+    if (history.past.length + history.future.length > 0) steps.save(place, packSteps(history));
+  }, [history, place]);
   const change = useCallback(
     (changes: Partial<SongDraft>, tag?: string) => act({ kind: "change", changes, tag: tag ?? null, now: Date.now() }),
     [],

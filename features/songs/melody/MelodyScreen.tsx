@@ -13,18 +13,17 @@ import { webStyle } from "@/features/ui/webStyle";
 import type { Song } from "@/shared/contract/song";
 import type { Instrument } from "@/shared/instruments/instrument";
 import type { SingingVoice } from "@/shared/keys/keyScore";
-import { tonicPitchClass } from "@/shared/music/keyName";
-import { glyphs, noteName, pitchClass } from "@/shared/music/pitch";
-import { tuneSpan } from "@/shared/songs/tuneSpan";
+import { glyphs, noteName } from "@/shared/music/pitch";
 import { isClash, useSaveSong } from "../songQueries";
 import { NoteEntry } from "./entry/NoteEntry";
 import { useTapTone } from "./entry/useTapTone";
 import { HomeChoice } from "./HomeChoice";
 import { keptTune, keptWords } from "./keptTune";
 import { SingPane, type SingButton } from "./SingPane";
-import { readSpan, SpanByHand, type SpanTexts } from "./SpanByHand";
+import { readSpan, SpanByHand } from "./SpanByHand";
 import { spellingOfHome } from "./spellingOfHome";
 import { TuneView } from "./TuneView";
+import { useEnds } from "./useEnds";
 import { useMelodyEditor } from "./useMelodyEditor";
 import { useTunePlayer } from "./useTunePlayer";
 
@@ -59,8 +58,11 @@ export function MelodyScreen({ song, voice, instrument, chooser, sing, onKept }:
   const player = useTunePlayer(tone, editor.tempo);
   const { history, dispatch, home, proposed } = editor;
   const { notes, chosen } = history;
-  const [way, setWay] = useState<Way>(song.tune?.kind === "span" ? "ends" : "sing");
-  const [ends, setEnds] = useState<SpanTexts>(() => endsOf(song));
+  const { ends, setEnds, ...endsDraft } = useEnds(song);
+  const [way, setWay] = useState<Way>(() => {
+    if (editor.found) return "sing";
+    return endsDraft.found || song.tune?.kind === "span" ? "ends" : "sing";
+  });
   const [tried, setTried] = useState(false);
   const spelling = spellingOfHome(home);
   const byEnds = way === "ends";
@@ -73,6 +75,7 @@ export function MelodyScreen({ song, voice, instrument, chooser, sing, onKept }:
   };
   const kept = () => {
     editor.letGo();
+    endsDraft.letGo();
     onKept();
   };
   const say = (midi: number | undefined) => (midi === undefined ? "" : glyphs(noteName(midi, spelling)));
@@ -157,14 +160,24 @@ export function MelodyScreen({ song, voice, instrument, chooser, sing, onKept }:
             : `${save.error.message} Its notes are still here.`}
         </Notice>
       )}
-      {editor.found && !byEnds && (
+      {(byEnds ? endsDraft : editor).found && (
         <Notice
           kind="good"
-          testID="notes-restored"
-          title="Your notes are back"
-          action={<Button kind="text" small label="Give them up" onPress={editor.giveUp} testID="notes-give-up" />}
+          testID={byEnds ? "ends-restored" : "notes-restored"}
+          title={byEnds ? "Your ends are back" : "Your notes are back"}
+          action={
+            <Button
+              kind="text"
+              small
+              label="Give them up"
+              onPress={(byEnds ? endsDraft : editor).giveUp}
+              testID={byEnds ? "ends-give-up" : "notes-give-up"}
+            />
+          }
         >
-          What you sang or entered and did not keep stands here again.
+          {byEnds
+            ? "What you wrote and did not keep stands here again."
+            : "What you sang or entered and did not keep stands here again."}
         </Notice>
       )}
       {wide ? (
@@ -196,19 +209,4 @@ export function MelodyScreen({ song, voice, instrument, chooser, sing, onKept }:
       )}
     </Screen>
   );
-}
-
-/** What the fields of the ends begin with: the ends that are known, the home note over the lowest. */
-function endsOf({ tune, writtenKey }: Song): SpanTexts {
-  const home = tune?.home ?? writtenKey?.tonic;
-  if (home === undefined) return { home: "", low: "", high: "" };
-  const span = tuneSpan(tune);
-  if (!span) return { home: glyphs(`${home}4`), low: "", high: "" };
-  const name = (midi: number) => glyphs(noteName(midi, spellingOfHome(home)));
-  const { lowMidi, highMidi } = span;
-  return {
-    home: name(lowMidi + pitchClass(tonicPitchClass(home) - lowMidi)),
-    low: name(lowMidi),
-    high: name(highMidi),
-  };
 }

@@ -1,4 +1,4 @@
-import { beginHistory, noteHistory } from "./noteHistory";
+import { beginHistory, noteHistory, stepsToKeep } from "./noteHistory";
 
 const tune = [
   { start: 0, duration: 1, midi: 60 },
@@ -24,4 +24,20 @@ test("an edit after going back forgets what was undone; choosing does not", () =
     future: [{ notes: other }],
   });
   expect(noteHistory(back, { kind: "edit", notes: [], chosen: null }).future).toEqual([]);
+});
+
+test("the latest thirty steps are kept with a draft, fewer of long tunes", () => {
+  const after = (steps: number, notes: typeof tune) =>
+    Array.from({ length: steps }).reduce<ReturnType<typeof beginHistory>>(
+      (state) => noteHistory(state, { kind: "edit", notes: [...notes], chosen: null }),
+      beginHistory(notes),
+    );
+  const short = after(40, tune);
+  expect(stepsToKeep(short)).toEqual(short.past.slice(-30));
+  const long = after(
+    5,
+    Array.from({ length: 1_000 }, (_, start) => ({ start, duration: 1, midi: 60 })),
+  );
+  expect(stepsToKeep(long)).toHaveLength(3);
+  expect(stepsToKeep(beginHistory(tune))).toEqual([]);
 });

@@ -3,7 +3,8 @@ import type { MelodyNote } from "@/shared/songs/melody";
 /** First and last chosen note; null where none is. */
 export type Chosen = { from: number; to: number } | null;
 
-interface Moment {
+/** Notes as they stood at one time. */
+export interface Moment {
   notes: readonly MelodyNote[];
   chosen: Chosen;
 }
@@ -21,9 +22,17 @@ export type NoteStep =
   | { kind: "redo" };
 
 const mostSteps = 200;
+const mostKept = { steps: 30, notes: 3_000 };
 
 export function beginHistory(notes: readonly MelodyNote[]): NoteHistory {
   return { notes, chosen: notes.length > 0 ? { from: 0, to: 0 } : null, past: [], future: [] };
+}
+
+/** The latest steps that are kept with a draft, so that a reload leaves the way back: as many as stay small. */
+export function stepsToKeep({ past }: NoteHistory): Moment[] {
+  let left = mostKept.notes;
+  const enough = past.slice(-mostKept.steps).findLastIndex(({ notes }) => (left -= notes.length) < 0);
+  return past.slice(-mostKept.steps).slice(enough + 1);
 }
 
 /** One step: an edit forgets what was undone; choosing notes is no edit. */

@@ -6,7 +6,7 @@ import { insertNote, replaceNotes } from "@/shared/songs/noteEdits";
 import { proposeHome, sungMelody, UNTIMED_TEMPO } from "@/shared/songs/sungMelody";
 import { deviceDraft } from "../deviceDraft";
 import { keptTune, keptWords, type KeptTune } from "./keptTune";
-import { beginHistory, noteHistory, type NoteHistory } from "./noteHistory";
+import { beginHistory, noteHistory, stepsToKeep, type Moment, type NoteHistory } from "./noteHistory";
 
 /** What becomes of a line that is sung. */
 export type SungPlace = "whole" | "part" | "on";
@@ -14,6 +14,8 @@ export type SungPlace = "whole" | "part" | "on";
 interface NotesDraft {
   notes: readonly MelodyNote[];
   home: string | null;
+  /** the way back; absent in older drafts */
+  past?: readonly Moment[];
 }
 
 const drafts = deviceDraft<NotesDraft>("notes-draft");
@@ -24,6 +26,7 @@ function notesOf({ tune }: Song): NotesDraft {
 
 /** What is kept, and over it what was changed and not kept: undoing leads back to what is kept. */
 function historyOf({ notes, draft }: { notes: readonly MelodyNote[]; draft: NotesDraft | null }): NoteHistory {
+  if (draft?.past) return { ...beginHistory(draft.notes), past: draft.past };
   const begun = beginHistory(notes);
   return draft ? noteHistory(begun, { kind: "edit", notes: draft.notes, chosen: { from: 0, to: 0 } }) : begun;
 }
@@ -37,9 +40,13 @@ export function useMelodyEditor(song: Song) {
   // Chosen or kept; without either it is what the notes say.
   const [settledHome, setHome] = useState<string | null>((found ?? base.current).home);
   const { notes, chosen } = history;
+  const latest = useRef(history);
+  useEffect(() => {
+    latest.current = history;
+  });
   useEffect(() => {
     if (notes === base.current.notes && settledHome === base.current.home) drafts.clear(song.id);
-    else drafts.save(song.id, { notes, home: settledHome });
+    else drafts.save(song.id, { notes, home: settledHome, past: stepsToKeep(latest.current) });
   }, [song.id, notes, settledHome]);
   const written = song.writtenKey;
   const proposed = useMemo(() => proposeHome(notes, written?.mode ?? null), [notes, written]);

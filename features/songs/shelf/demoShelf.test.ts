@@ -1,4 +1,5 @@
 import { kept, refuseStorage } from "@/__tests__/client/memoryIdb";
+import { deviceShelf } from "@/features/api/deviceShelf";
 import { shelf } from "@/features/api/shelf";
 import { song as songContract } from "@/shared/contract/song";
 import { demoSongs } from "@/shared/songs/demoSongs";
@@ -33,6 +34,18 @@ test("a visitor finds the demonstration with its tunes, as the contract wants it
     expect(songContract.parse(song)).toEqual(song);
     expect(song.tune?.kind).toBe("melody");
   }
+});
+
+test("one of its songs has a history, and counts as untouched all the same", async () => {
+  await seedDemoSongs();
+  const song = (await shelf.list("songs")).find(({ demo }) => demo === "lantern")!;
+  const versions = await deviceShelf.versions(song.id);
+  expect(versions.map(({ by }) => by)).toEqual(["the evening class", "the evening class"]);
+  expect(Date.parse(versions[0]!.savedAt)).toBeGreaterThan(Date.parse(versions[1]!.savedAt));
+  expect(versions[0]!.song.chart).not.toBe(song.chart);
+  expect(await deviceShelf.isAsSeeded(song)).toBe(true);
+  await shelf.put("songs", { ...song, tempo: 90 });
+  expect((await deviceShelf.versions(song.id))[0]!.song).toEqual(song);
 });
 
 test("asked for by several pages at once, it comes once", async () => {

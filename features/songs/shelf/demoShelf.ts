@@ -1,8 +1,10 @@
+import { deviceShelf } from "@/features/api/deviceShelf";
 import { newId } from "@/features/api/newId";
 import { session } from "@/features/api/session";
-import { shelf } from "@/features/api/shelf";
+
 import type { Song } from "@/shared/contract/song";
 import type { DemoSong } from "@/shared/songs/demo/demoSong";
+import { earlierCharts } from "@/shared/songs/demo/earlierCharts";
 import { lazyReaders } from "../files/lazyReaders";
 
 const mark = "larkspan.demo-songs";
@@ -42,7 +44,13 @@ async function seed(): Promise<void> {
   for (const demo of demoSongs) {
     const id = ids[demo.id];
     if (id === undefined || !left.includes(demo.id)) continue;
-    await shelf.put("songs", songOf(demo, id));
+    const song = songOf(demo, id);
+    const states = earlierCharts(demo, Date.now()).map(({ chart, savedAt }) => ({
+      savedAt,
+      by: "the evening class",
+      song: { ...song, chart },
+    }));
+    await deviceShelf.seed(song, states);
     left = left.filter((each) => each !== demo.id);
     writeMark({ ids, done: left.length === 0, left });
   }

@@ -7,6 +7,8 @@ export interface DemoSong {
   title: string;
   /** chords over words */
   chart: string;
+  /** how the chart stood before, the oldest first, and for how many days each */
+  earlier?: readonly { chart: string; days: number }[];
   writtenKey: KeyName;
   /** the tune of a verse and the chorus with their words, ABC notation */
   abc: string;

@@ -1,7 +1,7 @@
 import type { DemoSong } from "./demoSong";
 import { layNotes } from "./layNotes";
 
-const chart = `Verse 1
+const firstVerse = `Verse 1
 D              G                D
 Lantern on the slipway, burning low,
 D           Bm             A
@@ -9,9 +9,9 @@ somebody is rowing home, I know,
 G           D         Bm         G
 four on the water and one at the oar,
 D            A                D
-counting the lights along the shore.
+counting the lights along the shore.`;
 
-Chorus
+const chorus = `Chorus
 G           D                Bm
 Hold up the lantern, hold it long,
     G                 A       D
@@ -19,9 +19,9 @@ the quay is dark, the rope is strong,
 G           D                Bm
 hold up the lantern, hold it long,
               G           A       D
-and bring the boats home, song by song.
+and bring the boats home, song by song.`;
 
-Verse 2
+const secondVerse = `Verse 2
 D             G                    D
 Mother of the slipway, strike your match,
 D               Bm             A
@@ -30,6 +30,14 @@ G           D          Bm            G
 two for the kettle and three for the stair,
 D              A               D
 leave them the lamp beside the chair.`;
+
+const chart = [firstVerse, chorus, secondVerse].join("\n\n");
+
+/** The class began with three chords and one verse. */
+const earlier = [
+  { chart: [firstVerse, chorus].join("\n\n").replaceAll("Bm", "G "), days: 7 },
+  { chart: [firstVerse, chorus].join("\n\n"), days: 7 },
+];
 
 /** Pitch and length of each note; "-" is a rest. */
 const notes = `
@@ -68,6 +76,7 @@ export const lanternOnTheSlipway: DemoSong = {
   id: "lantern",
   title: "Lantern on the Slipway",
   chart,
+  earlier,
   writtenKey: { tonic: "D", mode: "major" },
   abc,
   notes: layNotes(notes),

@@ -84,6 +84,7 @@ it("makes its schemas from the contracts", async () => {
       "OwnInstrument",
       "Problem",
       "Session",
+      "SheetPdfRequest",
       "SignIn",
       "SignUp",
       "Song",

@@ -1,7 +1,8 @@
 import { render, screen } from "@testing-library/react";
 import type { Shape } from "@/shared/ways/way";
 import { ChordGrid } from "./ChordGrid";
-import { cardMeasure, fretY, gridWindow, nameLines, pieceMeasure, spokenGrid, stringX } from "./chordGridGeometry";
+import { gridWindow } from "@/shared/ways/gridWindow";
+import { cardMeasure, fretY, nameLines, pieceMeasure, spokenGrid, stringX } from "./chordGridGeometry";
 
 function shape(frets: (number | null)[], fingers: number[], roots: number[], barre: Shape["barre"] = null): Shape {
   return { frets, fingers, roots, barre, reachMm: 0, ease: 1 };

@@ -1,11 +1,11 @@
 import { View } from "react-native";
 import Svg, { Circle, G, Line, Rect } from "react-native-svg";
 import { glyphs } from "@/shared/music/pitch";
+import { gridWindow } from "@/shared/ways/gridWindow";
 import type { Shape } from "@/shared/ways/way";
 import {
   cardMeasure,
   fretY,
-  gridWindow,
   nameLines,
   pieceMeasure,
   spokenGrid,

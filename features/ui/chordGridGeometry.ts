@@ -1,3 +1,4 @@
+import type { GridWindow } from "@/shared/ways/gridWindow";
 import type { Shape } from "@/shared/ways/way";
 
 /** Distances of a chord grid in px. */
@@ -9,23 +10,6 @@ export interface GridMeasure {
 
 export const cardMeasure: GridMeasure = { string: 16, fret: 17, dot: 6.5 };
 export const pieceMeasure: GridMeasure = { string: 17, fret: 18, dot: 7.6 };
-
-/** Which frets a grid shows. */
-export interface GridWindow {
-  /** fret of the first row; 1 at the nut or capo */
-  first: number;
-  rows: number;
-}
-
-/** Four frets from the nut where the shape fits there, else from its lowest stopped fret; more rows where it needs them. */
-export function gridWindow(shape: Pick<Shape, "frets">): GridWindow {
-  const stopped = shape.frets.filter((fret): fret is number => fret !== null && fret > 0);
-  if (stopped.length === 0) return { first: 1, rows: 4 };
-  const low = Math.min(...stopped);
-  const high = Math.max(...stopped);
-  if (high <= 4 || low === 1) return { first: 1, rows: Math.max(4, high) };
-  return { first: low, rows: Math.max(4, high - low + 1) };
-}
 
 /** Horizontal place of a string; left-handed grids are mirrored. */
 export function stringX(index: number, strings: number, measure: GridMeasure, leftHanded: boolean): number {

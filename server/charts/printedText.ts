@@ -1,31 +1,20 @@
 import { readFileSync } from "node:fs";
 import path from "node:path";
 import PDFDocument from "pdfkit";
+import type { SheetFace, SheetText } from "../../shared/sheets/sheetPiece";
 import { writeGlyphsFromOutlines } from "./webFontGlyphs";
 
-export type Face = "mono" | "monoBold" | "title";
-
-const files = {
+const files: Record<SheetFace | "music", string> = {
   mono: "sometype-mono-latin-400-normal",
   monoBold: "sometype-mono-latin-600-normal",
   title: "bricolage-grotesque-latin-700-normal",
+  text: "figtree-latin-400-normal",
+  textBold: "figtree-latin-600-normal",
   music: "noto-music-music-400-normal",
 };
 const folder = path.resolve(__dirname, "../../fonts");
 
-/** Every letter of the monospaced face is so wide, in parts of its size. */
-export const cellWidth = 0.58;
-
 const isMusic = (sign: string) => /[♯♭♮]/.test(sign);
-
-interface Place {
-  face: Face;
-  size: number;
-  color: string;
-  x: number;
-  /** of the base line */
-  y: number;
-}
 
 interface Glyph {
   advanceWidth: number;
@@ -40,10 +29,6 @@ interface Embedded {
   };
   subset: object;
 }
-
-/** The music font's signs are small beside letters, and its sharp hangs low. */
-const musicScale = 1.25;
-const lift = (sign: string) => (sign === "♭" ? 0 : 0.14);
 
 /** A PDF whose text is set from the product's own fonts, accidentals from the music font. */
 export class PrintedText {
@@ -62,12 +47,13 @@ export class PrintedText {
       this.document.registerFont(name, readFileSync(path.join(folder, `${file}.woff2`)));
       const { font, subset } = this.embedded(name);
       writeGlyphsFromOutlines(subset);
-      if (name !== "title") font.layout = (text) => oneByOne(font.glyphsForString(text));
+      // Set one by one, as the layout has counted them: without what letters do to one another.
+      font.layout = (text) => oneByOne(font.glyphsForString(text));
     }
   }
 
   /** The text with what a face can set: accents it does not know fall off, other strange signs become "?". */
-  printable(text: string, face: Face): string {
+  printable(text: string, face: SheetFace): string {
     const has = (sign: string) => isMusic(sign) || this.hasGlyph(sign, face);
     let printed = "";
     for (const sign of text.normalize("NFC")) {
@@ -78,38 +64,24 @@ export class PrintedText {
     return printed;
   }
 
-  width(text: string, face: Face, size: number): number {
-    return runsOf(text).reduce((sum, { run, music }) => sum + this.runWidth(run, music ? "music" : face, size), 0);
-  }
-
-  /** Sets one line; in the monospaced faces every sign has its column. */
-  line(text: string, { face, size, color, x, y }: Place): void {
-    const cell = face === "title" ? null : size * cellWidth;
-    let at = x;
-    for (const { run, music } of runsOf(text)) {
-      for (const piece of music ? [...run] : [run]) {
-        const natural = this.runWidth(piece, music ? "music" : face, size);
-        const room = cell === null ? natural : cell * piece.length;
-        const inset = music ? (room - natural) / 2 : 0;
-        if (piece.trim() !== "")
-          this.document
-            .font(music ? "music" : face)
-            .fontSize(music ? size * musicScale : size)
-            .fillColor(color)
-            .text(piece, at + inset, music ? y - size * lift(piece) : y, { lineBreak: false, baseline: "alphabetic" });
-        at += room;
-      }
+  /** Draws one line where it was laid. */
+  draw({ runs, face }: SheetText, color: string): void {
+    for (const { text, x, y, size, music } of runs) {
+      const shown = music ? text : this.printable(text, face);
+      if (shown.trim() === "") continue;
+      const { document } = this;
+      document
+        .font(music ? "music" : face)
+        .fontSize(size)
+        .fillColor(color);
+      // The music font has one weight; a thin outline brings it nearer to letters in bold.
+      const bold = music && face !== "mono" && face !== "text";
+      if (bold) document.lineWidth(size * 0.03).strokeColor(color);
+      document.text(shown, x, y, { lineBreak: false, baseline: "alphabetic", fill: true, stroke: bold });
     }
   }
 
-  /** Without what letters do to one another: that takes long for long words, and changes little. */
-  private runWidth(run: string, name: Face | "music", size: number): number {
-    const { font } = this.embedded(name);
-    const units = font.glyphsForString(run).reduce((sum, { advanceWidth }) => sum + advanceWidth, 0);
-    return (units / font.unitsPerEm) * (name === "music" ? size * musicScale : size);
-  }
-
-  private hasGlyph(sign: string, face: Face): boolean {
+  private hasGlyph(sign: string, face: SheetFace): boolean {
     const point = sign.codePointAt(0) ?? 0;
     return point >= 32 && this.embedded(face).font.hasGlyphForCodePoint(point);
   }
@@ -120,7 +92,6 @@ export class PrintedText {
   }
 }
 
-/** In the monospaced and the music font no sign depends on its neighbours. */
 function oneByOne(glyphs: Glyph[]) {
   const positions = glyphs.map(({ advanceWidth }) => ({ xAdvance: advanceWidth, yAdvance: 0, xOffset: 0, yOffset: 0 }));
   return { glyphs, positions, advanceWidth: positions.reduce((sum, { xAdvance }) => sum + xAdvance, 0) };
@@ -129,8 +100,4 @@ function oneByOne(glyphs: Glyph[]) {
 function plainLetter(sign: string, has: (sign: string) => boolean): string {
   const base = sign.normalize("NFKD").charAt(0);
   return base !== sign && base !== "" && has(base) ? base : "?";
-}
-
-function runsOf(text: string): { run: string; music: boolean }[] {
-  return [...text.matchAll(/[♯♭♮]+|[^♯♭♮]+/g)].map(([run]) => ({ run, music: isMusic(run) }));
 }

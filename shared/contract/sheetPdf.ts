@@ -1,0 +1,76 @@
+import { z } from "zod";
+import { song, tonicName } from "./song";
+
+const key = song.shape.writtenKey.unwrap();
+const name = z.string().max(80);
+const fret = z.int().min(0).max(36);
+const string = z.int().min(0).max(11);
+const strings = z
+  .array(z.string().regex(/^[A-G](#|b)?-?\d$/, "Name a string like A3 or F#4."))
+  .min(1)
+  .max(12);
+
+const shape = z.strictObject({
+  frets: z.array(fret.nullable()).min(1).max(12),
+  fingers: z.array(z.int().min(0).max(5)).min(1).max(12),
+  barre: z.strictObject({ fret, fromString: string, toString: string }).nullable(),
+  reachMm: z.number().min(0).max(2000),
+  ease: z.number().min(0).max(1),
+  roots: z.array(string).max(12),
+});
+
+const sheet = z.strictObject({
+  title: song.shape.title,
+  facts: z.string().max(300),
+  chart: song.shape.chart,
+  from: key.nullable(),
+  key: key.nullable(),
+  singer: name.nullable(),
+  firstNote: z
+    .string()
+    .regex(/^[A-G](#|b)?-?\d$/, "Name a note like C4 or F#3.")
+    .nullable(),
+  instrument: z
+    .strictObject({
+      name,
+      strings,
+      tuned: strings,
+      fretNames: z.array(z.string().max(8)).max(40).nullable(),
+      leftHanded: z.boolean(),
+      retune: z.int().min(-12).max(12),
+      capo: z.int().min(0).max(24),
+      shapeKey: z.strictObject({ tonic: tonicName, mode: key.shape.mode }),
+    })
+    .nullable(),
+  chords: z.array(z.strictObject({ written: name, sounding: name, played: name, shape: shape.nullable() })).max(200),
+  strokes: z
+    .strictObject({
+      beats: z.int().min(1).max(16),
+      quarters: z.number().positive().max(16),
+      strokes: z
+        .array(
+          z.strictObject({
+            at: z.number().min(0).max(16),
+            kind: z.enum(["down", "up", "pluck", "bass"]),
+            strong: z.boolean(),
+          }),
+        )
+        .max(64),
+      words: z.string().max(300),
+    })
+    .nullable(),
+});
+
+/** How a sheet is laid out; also kept on the device as the player's own habit. */
+const sheetOptions = z.strictObject({
+  paper: z.enum(["A4", "Letter"]),
+  grids: z.enum(["side", "top", "none"]),
+  numbers: z.boolean(),
+  letters: z.enum(["small", "usual", "large", "largest"]),
+  shows: z.enum(["played", "sounding"]),
+  leftHanded: z.boolean(),
+});
+
+/** A sheet to be set as a PDF. */
+export const sheetPdfRequest = z.strictObject({ sheet, options: sheetOptions });
+export type SheetPdfRequest = z.infer<typeof sheetPdfRequest>;

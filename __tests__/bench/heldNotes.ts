@@ -1,3 +1,4 @@
+import { median } from "../../shared/signal/median";
 import type { ToolResult } from "./scoring";
 
 const HELD_FRAMES = 24;
@@ -50,10 +51,6 @@ function smoothed(midi: readonly (number | null)[]): (number | null)[] {
   return midi.map((m, k) =>
     m === null ? null : median(midi.slice(Math.max(0, k - half), k + half + 1).filter((x) => x !== null)),
   );
-}
-
-function median(values: readonly number[]): number {
-  return [...values].sort((a, b) => a - b)[values.length >> 1]!;
 }
 
 function ends(values: readonly number[]): ToolResult["range"] {

@@ -1,3 +1,4 @@
+import { median } from "../signal/median";
 import { hzToMidi } from "../music/pitch";
 import type { TakeReport } from "../voice/takeReport";
 import { foldedSemitones, PATH_RATE, pathThroughTune, type PathBand, type WantedFrames } from "./alignTakePath";
@@ -65,7 +66,7 @@ export function alignTake(wanted: readonly WantedNote[], f0: TakeReport["f0"], s
   const fine = foldedSemitones(ownTuning(sung, tune, frames, offset));
   const pairs = pairsOf(sung, tune, frames);
   if (pairs.length === 0) return null;
-  const octaves = median(pairs.map((difference) => Math.round((difference - fine) / 12))) || 0;
+  const octaves = Math.round(median(pairs.map((difference) => Math.round((difference - fine) / 12)))) || 0;
   const near = pairs.filter((difference) => Math.abs(foldedSemitones(difference - fine)) < 1).length;
   return { spans: spansOf(wanted, origin, frames), octaves, offset: fine, fit: near / voiced };
 }
@@ -157,9 +158,4 @@ function spansOf(wanted: readonly WantedNote[], origin: number, frames: Int32Arr
     }
     return longest;
   });
-}
-
-function median(values: readonly number[]): number {
-  const sorted = [...values].sort((a, b) => a - b);
-  return sorted[sorted.length >> 1]!;
 }

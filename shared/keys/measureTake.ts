@@ -1,3 +1,4 @@
+import { median } from "../signal/median";
 import { hzToMidi } from "../music/pitch";
 import type { SungNote, TakeReport } from "../voice/takeReport";
 import { type Alignment, alignTake, type Singing, type WantedNote } from "./alignTake";
@@ -263,9 +264,4 @@ function middleOf({ start, end }: SungNote): number {
 
 function round(value: number): number {
   return Math.round(value * 100) / 100;
-}
-
-function median(values: readonly number[]): number {
-  const sorted = [...values].sort((a, b) => a - b);
-  return sorted[sorted.length >> 1]!;
 }

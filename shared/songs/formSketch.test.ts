@@ -7,6 +7,8 @@ const beat = { tempo: 120, beatsPerBar: 4 };
 test("taps give the tempo, with half and double offered", () => {
   expect(tempoOfTaps([0, 0.625, 1.25, 1.875, 2.5])).toMatchObject({ tempo: 96, half: 48, double: 192, beats: 5 });
   expect(tempoOfTaps([0, 0.5, 1])).toBeNull();
+  // Half as fast from the middle on: there is no one tempo.
+  expect(tempoOfTaps([0, 0.4, 0.8, 1.8, 2.8])).toBeNull();
   expect(tempoOfTaps([0, 0.2, 0.4, 0.6, 0.8])).toMatchObject({ tempo: 300, double: null });
 });
 

@@ -1,3 +1,4 @@
+import { median } from "../signal/median";
 import { parseChart } from "./chart";
 
 /** What taps on a beat tell. */
@@ -27,7 +28,7 @@ const tempoRange = { low: 20, high: 400 };
  * twice.
  *
  * @param taps times of the taps in seconds, ascending
- * @returns the tempo; null for fewer than four taps in a row
+ * @returns the tempo; null for fewer than four taps in a row, and where they have no common tempo
  * @example tempoOfTaps([0, 0.5, 1, 1.5, 2]).tempo // => 120
  */
 export function tempoOfTaps(taps: readonly number[]): TappedTempo | null {
@@ -39,6 +40,7 @@ export function tempoOfTaps(taps: readonly number[]): TappedTempo | null {
   if (gaps.length < leastBeats - 1) return null;
   const middle = median(gaps);
   const even = gaps.filter((gap) => Math.abs(gap / middle - 1) <= slip);
+  if (even.length === 0) return null;
   // The mean of what is even is steadier than one gap; the median only says which gaps those are.
   const beat = even.reduce((sum, gap) => sum + gap, 0) / even.length;
   const tempo = Math.round(60 / beat);
@@ -161,12 +163,6 @@ function blocksOf(text: string): string[] {
 
 function gapsOf(times: readonly number[]): number[] {
   return times.slice(1).map((time, k) => time - times[k]!);
-}
-
-function median(values: readonly number[]): number {
-  const sorted = [...values].sort((a, b) => a - b);
-  const half = sorted.length >> 1;
-  return sorted.length % 2 === 1 ? sorted[half]! : (sorted[half - 1]! + sorted[half]!) / 2;
 }
 
 function within(tempo: number): number | null {

@@ -1,3 +1,4 @@
+import { median } from "../signal/median";
 import { weightedQuantile } from "./pitchSpread";
 import { speechCues, type SpeechCues } from "./speechCues";
 import type { TrackFrame } from "./trackFrame";
@@ -158,9 +159,4 @@ function drift(frames: readonly TrackFrame[], notes: readonly HeardNote[]): numb
 
 function inside(frames: readonly TrackFrame[], note: HeardNote): readonly TrackFrame[] {
   return frames.slice(Math.round(note.start * 100) + 5, Math.round(note.end * 100) - 5);
-}
-
-function median(values: readonly number[]): number {
-  const sorted = [...values].sort((a, b) => a - b);
-  return sorted[sorted.length >> 1] ?? 0;
 }

@@ -1,3 +1,4 @@
+import { median } from "../signal/median";
 import { cutContour, smoothContour } from "./noteContour";
 import type { TrackFrame } from "./trackFrame";
 import type { SungNote } from "./takeReport";
@@ -136,10 +137,4 @@ function findVibrato(midi: number[], contour: number[]): { rateHz: number; exten
   if (crossings.length < 3) return null;
   const rateHz = (50 * (crossings.length - 1)) / (crossings[crossings.length - 1]! - crossings[0]!);
   return rateHz >= 4 && rateHz <= 9 ? { rateHz, extentCents } : null;
-}
-
-function median(values: number[]): number {
-  const sorted = [...values].sort((a, b) => a - b);
-  const middle = sorted.length >> 1;
-  return sorted.length % 2 === 1 ? sorted[middle]! : (sorted[middle - 1]! + sorted[middle]!) / 2;
 }

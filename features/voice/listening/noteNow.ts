@@ -1,3 +1,4 @@
+import { median } from "@/shared/signal/median";
 import { hzToMidi } from "@/shared/music/pitch";
 import type { LiveFrame } from "@/shared/voice/liveTracker";
 
@@ -48,8 +49,8 @@ export function noteNow(frames: readonly LiveFrame[]): NoteNow | null {
 /** The newest pitch, smoothed over as much of the same note as has sounded without another one between. */
 function centreNow(frames: readonly LiveFrame[]): number | null {
   const lately = frames.slice(-gapFrames).flatMap(({ hz }) => (hz === null ? [] : [hzToMidi(hz)]));
+  if (lately.length === 0) return null;
   const newest = median(lately.slice(-newestFrames));
-  if (newest === null) return null;
   const same: number[] = [];
   let other = 0;
   for (let k = frames.length - 1; k >= Math.max(0, frames.length - recentFrames) && other < newestFrames; k -= 1) {
@@ -59,15 +60,11 @@ function centreNow(frames: readonly LiveFrame[]): number | null {
     if (Math.abs(midi - newest) < otherNoteSemitones) same.push(midi);
     else other += 1;
   }
-  return median(same);
+  return same.length === 0 ? null : median(same);
 }
 
 function wordsFor(cents: number): NoteNow["words"] {
   if (Math.abs(cents) <= 15) return "On the line";
   if (cents < 0) return cents < -30 ? "Flat" : "A little flat";
   return cents > 30 ? "Sharp" : "A little sharp";
-}
-
-function median(values: readonly number[]): number | null {
-  return [...values].sort((a, b) => a - b)[values.length >> 1] ?? null;
 }

@@ -3,11 +3,11 @@ import * as sounds from "../sound/noSinging";
 import { singPhrase } from "../sound/singer";
 import { makeMicrophones } from "./microphone";
 import { setStage } from "./stage";
-import { singFor } from "./singing";
+import { enoughS, singFor } from "./singing";
 
 const rate = 44_100;
 const microphones = makeMicrophones();
-const stage = setStage("fresh");
+const stage = setStage("kept");
 afterAll(microphones.remove);
 
 async function open(wav: string) {
@@ -48,7 +48,7 @@ test.each([
   ["a strummed instrument", "not-singing", () => sounds.strummedStrings(1, rate, 8), true],
   ["a voice that the room drowns", "too-noisy", drowned, false],
 ] as const)("%s is refused as %s, with the reason and the ways on", async (name, verdict, make, padded) => {
-  const { page, errors } = await open(microphones.sound(name.replaceAll(" ", "-"), make(), rate, padded));
+  const { page, errors, context } = await open(microphones.sound(name.replaceAll(" ", "-"), make(), rate, padded));
   await page.goto("/voice/sing");
   await singFor(page, 6);
   const failure = page.getByTestId(`take-failure-${verdict}`);
@@ -59,6 +59,7 @@ test.each([
   await page.getByTestId("sing-upload").click();
   await page.getByTestId("upload-choose").waitFor();
   expect(errors).toEqual([]);
+  await context.close();
 });
 
 /**
@@ -122,20 +123,21 @@ describe.each([
   ["call", "A call or another program took the microphone"],
 ] as const)("a take that is interrupted (%s)", (how, words) => {
   test("keeps what was sung until then", async () => {
-    const { page } = await open(microphones.voice(55).wav);
+    const { page, context } = await open(microphones.voice(55).wav);
     await holdTrack(page);
     await page.goto("/voice/sing");
-    await interruptAt(page, 7, how);
+    await interruptAt(page, enoughS, how);
     await page.getByTestId("sing-start").click();
     expect(await page.getByTestId("take-broken-off").textContent()).toContain(words);
     await page.getByTestId("comfort-notes").waitFor();
     await page.getByTestId("sing-keep").click();
     await page.waitForURL("**/voice");
+    await context.close();
   });
 });
 
 test("a take that is interrupted where too little was sung is called so", async () => {
-  const { page } = await open(microphones.voice(55).wav);
+  const { page, context } = await open(microphones.voice(55).wav);
   await holdTrack(page);
   await page.goto("/voice/sing");
   await interruptAt(page, 1, "hidden");
@@ -143,10 +145,11 @@ test("a take that is interrupted where too little was sung is called so", async 
   expect(await page.getByTestId("take-failure-interrupted").textContent()).toContain(
     "This page went into the background",
   );
+  await context.close();
 });
 
 test("sound processing that the browser keeps on is said so, with what it means", async () => {
-  const { page } = await open(microphones.voice(55).wav);
+  const { page, context } = await open(microphones.voice(55).wav);
   await page.addInitScript(() => {
     const told = MediaStreamTrack.prototype.getSettings;
     MediaStreamTrack.prototype.getSettings = function () {
@@ -154,8 +157,9 @@ test("sound processing that the browser keeps on is said so, with what it means"
     };
   });
   await page.goto("/voice/sing");
-  await singFor(page, 9);
+  await singFor(page, enoughS);
   const said = await page.getByTestId("take-processed").textContent();
   expect(said).toContain("kept noise suppression on");
   expect(said).toContain("soft notes");
+  await context.close();
 });

@@ -14,6 +14,13 @@ const tune = [0, 4, 7, 9, 12, 14, 12, 9, 7, 5, 4, 2, 0].map((step) => ({
   durationS: step === 0 || step === 14 ? 0.9 : 0.55,
 }));
 
+/** A file of singing, and what was truly sung. */
+interface SungTune {
+  wav: string;
+  lowestMidi: number;
+  highestMidi: number;
+}
+
 /** A folder of wav files for one test file's browsers; `remove` takes it away. */
 export function makeMicrophones() {
   const folder = mkdtempSync(join(tmpdir(), "microphone-"));
@@ -22,9 +29,12 @@ export function makeMicrophones() {
     writeWav(wav, pcm, sampleRate);
     return wav;
   };
+  const voices = new Map<number, SungTune>();
   return {
-    /** A source-filter voice singing the tune from the given lowest note. */
-    voice(lowestMidi: number) {
+    /** A source-filter voice singing the tune from the given lowest note; rendered once. */
+    voice(lowestMidi: number): SungTune {
+      const rendered = voices.get(lowestMidi);
+      if (rendered) return rendered;
       const notes = tune.map(({ step, durationS }) => ({ midi: lowestMidi + step, durationS }));
       const { pcm, truth, sampleRate } = singPhrase({
         notes,
@@ -34,11 +44,13 @@ export function makeMicrophones() {
         vibrato: { rateHz: 5.6, extentCents: 35 },
         tract: lowestMidi < 55 ? 1 : 1.15,
       });
-      return {
+      const sung = {
         wav: keep(`voice-${lowestMidi}`, pcm, sampleRate),
         lowestMidi: truth.lowestMidi,
         highestMidi: truth.highestMidi,
       };
+      voices.set(lowestMidi, sung);
+      return sung;
     },
     /** The same voice singing the tune over and over, longer than a take may be. */
     longVoice(lowestMidi: number) {

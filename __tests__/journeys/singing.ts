@@ -1,6 +1,9 @@
 import type { Page } from "playwright-core";
 
-/** Presses start and sings for as long as the page itself counts; 9 seconds hold the journeys' whole tune. */
+/** So much of the journeys' tune, in seconds, is enough for a range; the whole tune is 9 seconds long. */
+export const enoughS = 5;
+
+/** Presses start and sings for as long as the page itself counts. */
 export async function singFor(page: Page, seconds: number): Promise<void> {
   await page.getByTestId("sing-start").click();
   await sungUpTo(page, seconds);

@@ -3,7 +3,7 @@ import { readFileSync, truncateSync, writeFileSync } from "node:fs";
 import { join } from "node:path";
 import type { Page } from "playwright-core";
 import { glyphs, noteName } from "../../shared/music/pitch";
-import type { Viewport } from "./browser";
+import type { Profile, Viewport } from "./browser";
 import { speech } from "../sound/noSinging";
 import { writeWav } from "../sound/wavFile";
 import { makeMicrophones } from "./microphone";
@@ -118,15 +118,19 @@ describe("what cannot be used is refused with the reason", () => {
     ],
   ];
 
+  // One page for all: the way on from each refusal leads to the next file.
+  let profile: Profile | null = null;
+  afterAll(() => profile?.context.close());
+
   test.each(files)("%s: %s", async (_what, kind, make, words) => {
     const path = make();
-    const { context, page } = await open();
+    profile ??= await open();
+    const { page } = profile;
     await choose(page, path);
     expect(await page.getByTestId(`take-failure-${kind}`).textContent()).toMatch(words);
     // The way on leads to another file.
     await page.getByTestId("sing-again").click();
     await page.getByTestId("upload-choose").waitFor();
-    await context.close();
   });
 
   test.each(["wav", "mp3"])("a shout that the microphone cut off is told as such in a %s too", async (kind) => {

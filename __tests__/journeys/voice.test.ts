@@ -3,7 +3,7 @@ import { glyphs, noteName } from "../../shared/music/pitch";
 import type { Microphone, Viewport } from "./browser";
 import { makeMicrophones } from "./microphone";
 import { setStage } from "./stage";
-import { singFor, sungUpTo } from "./singing";
+import { enoughS, singFor, sungUpTo } from "./singing";
 
 const microphones = makeMicrophones();
 const stage = setStage("fresh");
@@ -59,7 +59,7 @@ describe("a sung phrase", () => {
     await page.waitForFunction(() =>
       /^[A-G]/.test(document.querySelector('[data-testid="note-now"]')?.textContent ?? ""),
     );
-    await sungUpTo(page, 9);
+    await sungUpTo(page, enoughS);
     await page.getByTestId("sing-stop").click();
     const summary = await ladderWords(page);
     await page.getByTestId("take-play").click();

@@ -68,52 +68,34 @@ export function Screen({
 
   const head = { title, subtitle, crumb, back, brand, large, closes, heading };
   const foot = footer ?? actions;
-  if (!phone) {
-    return (
-      <View
-        style={{
-          flexGrow: 1,
-          paddingHorizontal: sizes.gutterWide,
-          paddingTop: 24,
-          paddingBottom: 40,
-          gap: 20,
-          width: "100%",
-          maxWidth: sizes.content + 2 * sizes.gutterWide,
-        }}
-      >
-        <WideHead {...head} actions={actions ?? footer} />
-        <View
-          role="main"
-          nativeID="main"
-          {...webProps({ tabIndex: -1 })}
-          style={[
-            { flexGrow: 1, width: "100%", maxWidth: wide ? sizes.content : 760 },
-            webStyle({ outlineStyle: "none" }),
-          ]}
-        >
-          {children}
-        </View>
-      </View>
-    );
-  }
+  // One tree for both layouts, so that nothing on the page is lost when a phone is turned or a window is drawn wider.
   return (
-    <View style={{ flexGrow: 1 }}>
-      <PhoneTop {...head} />
+    <View style={phone ? { flexGrow: 1 } : aroundWide}>
+      {phone ? <PhoneTop {...head} /> : <WideHead {...head} actions={actions ?? footer} />}
       <View
         role="main"
         nativeID="main"
         {...webProps({ tabIndex: -1 })}
-        style={[{ flexGrow: 1 }, webStyle({ outlineStyle: "none" })]}
+        style={[
+          { flexGrow: 1 },
+          phone ? null : { width: "100%", maxWidth: wide ? sizes.content : 760 },
+          webStyle({ outlineStyle: "none" }),
+        ]}
       >
-        <View style={{ flexGrow: 1, paddingHorizontal: sizes.gutterPhone, paddingBottom: foot ? 8 : 24 }}>
-          {large && (
+        <View
+          style={[
+            { flexGrow: 1 },
+            phone ? { paddingHorizontal: sizes.gutterPhone, paddingBottom: foot ? 8 : 24 } : null,
+          ]}
+        >
+          {phone && large && (
             <Heading ref={heading} level={1} size={26} focusable style={{ marginTop: 2, marginBottom: 12 }}>
               {title}
             </Heading>
           )}
           {children}
         </View>
-        {foot !== undefined && foot !== null && (
+        {phone && foot !== undefined && foot !== null && (
           <View
             style={[
               {
@@ -137,3 +119,13 @@ export function Screen({
     </View>
   );
 }
+
+const aroundWide = {
+  flexGrow: 1,
+  paddingHorizontal: sizes.gutterWide,
+  paddingTop: 24,
+  paddingBottom: 40,
+  gap: 20,
+  width: "100%",
+  maxWidth: sizes.content + 2 * sizes.gutterWide,
+} as const;

@@ -1,4 +1,4 @@
-import { cleanup, fireEvent, render, screen, waitFor } from "@testing-library/react";
+import { act, cleanup, fireEvent, render, screen, waitFor } from "@testing-library/react";
 import type { AnchorHTMLAttributes, ReactNode } from "react";
 import { isMissingChunk, MissingChunkBoundary } from "./MissingChunkBoundary";
 import { places } from "./places";
@@ -43,6 +43,33 @@ describe("the shell", () => {
     expect(screen.getByRole("main").id).toBe("main");
     expect(screen.getByRole("heading", { level: 1 }).textContent).toBe("Songs");
     expect(screen.getByText("Skip to the content").getAttribute("href")).toBe("#main");
+  });
+
+  it("keeps what was typed when a phone is turned, or a window drawn wider", () => {
+    const widthWas = window.innerWidth;
+    const turnTo = (width: number) =>
+      act(() => {
+        Object.defineProperty(document.documentElement, "clientWidth", { configurable: true, value: width });
+        Object.defineProperty(window, "innerWidth", { configurable: true, value: width });
+        window.dispatchEvent(new Event("resize"));
+      });
+    turnTo(390);
+    render(
+      <Shell>
+        <Screen title="Words">
+          <input aria-label="words" defaultValue="" />
+        </Screen>
+      </Shell>,
+    );
+    const bars = screen.getAllByRole("navigation").length;
+    const field = screen.getByLabelText("words");
+    fireEvent.change(field, { target: { value: "salt on the window" } });
+    turnTo(1440);
+    expect(screen.getByLabelText("words")).toBe(field);
+    turnTo(390);
+    expect(screen.getByLabelText("words")).toBe(field);
+    expect(screen.getAllByRole("navigation")).toHaveLength(bars);
+    turnTo(widthWas);
   });
 
   it("marks the place where one is", () => {

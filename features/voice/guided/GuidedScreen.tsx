@@ -3,14 +3,12 @@ import { useEffect, useRef, useState } from "react";
 import { View } from "react-native";
 import { newId } from "@/features/api/newId";
 import { Button } from "@/features/ui/Button";
-import { Card } from "@/features/ui/Card";
-import { LinkButton } from "@/features/ui/LinkButton";
 import { LiveText } from "@/features/ui/LiveText";
 import { Notice } from "@/features/ui/Notice";
 import { Screen } from "@/features/ui/Screen";
-import { Text } from "@/features/ui/Text";
 import type { Voice } from "@/shared/contract/voice";
 import { KeepTake } from "../sing/KeepTake";
+import { RefusalPage } from "../sing/RefusalPage";
 import { noteWord, whenWords } from "../noteWords";
 import { useSingingVoice } from "../useSingingVoice";
 import { newVoice, useKeepHolds, voiceQueries } from "../voiceQueries";
@@ -144,23 +142,12 @@ function Result({ state, chosenId, onFound, onAgain, onKept }: ResultProps) {
 function Failed({ why, onAgain }: { why: (GuidedState & { step: "failed" })["why"]; onAgain: () => void }) {
   const words = failedWords(why);
   return (
-    <Screen
-      title={words.title}
-      crumb={{ label: "Voice", href: "/voice" }}
-      footer={
-        <>
-          <Button icon="again" label="Start again" onPress={onAgain} testID="guided-restart" />
-          <LinkButton kind="secondary" label="Set notes by hand" href="/voice/by-hand" />
-        </>
-      }
-    >
-      <View role="alert" testID={`guided-failed-${why}`} style={{ paddingTop: 12, maxWidth: 560 }}>
-        <Card style={{ gap: 12 }}>
-          <Text variant="strong">{words.happened}</Text>
-          <Text>{words.next}</Text>
-        </Card>
-      </View>
-    </Screen>
+    <RefusalPage
+      words={words}
+      again={{ icon: "again", label: "Start again", onPress: onAgain, testID: "guided-restart" }}
+      except="guided"
+      testID={`guided-failed-${why}`}
+    />
   );
 }
 

@@ -1,5 +1,5 @@
 import type { FailureKind } from "../recorder/recorder";
-import { failureWords } from "../sing/failureWords";
+import { failureWords, type FailureWords } from "../sing/failureWords";
 import { noteWord } from "../noteWords";
 import type { TryOutcome } from "./hearing/guidedHold";
 import { farthest, type GuidedEnd, type GuidedRun, type GuidedState } from "./guidedSteps";
@@ -77,16 +77,13 @@ export function soFarWords(run: GuidedRun): string {
   return `${run.end === "low" ? "Lowest" : "Highest"} held so far: ${noteWord(edge.midi)}, ${edge.heldS.toFixed(1)} s.`;
 }
 
-export function failedWords(why: (GuidedState & { step: "failed" })["why"]): {
-  title: string;
-  happened: string;
-  next: string;
-} {
+export function failedWords(why: (GuidedState & { step: "failed" })["why"]): FailureWords {
   if (why === "nothing") {
     return {
       title: "Only one note so far",
       happened: "One held note does not show where a voice ends.",
-      next: "Start again when you like. Your voices are as they were.",
+      safe: "Nothing was kept, and your voices are as they were.",
+      next: "Start again when you like, or sing a few seconds of a song instead.",
     };
   }
   const unavailable: FailureKind[] = ["refused", "no-microphone", "insecure", "busy", "unsupported", "broken"];

@@ -4,6 +4,7 @@ import { LiveText } from "@/features/ui/LiveText";
 import { Screen } from "@/features/ui/Screen";
 import { Text } from "@/features/ui/Text";
 import { colors } from "@/features/ui/theme";
+import { useLayout } from "@/features/ui/useLayout";
 import { countInBeats } from "../recorder/countIn";
 
 export interface CountInScreenProps {
@@ -14,6 +15,8 @@ export interface CountInScreenProps {
 
 /** The count before a take, for eyes as for ears: a number and a row of beats. */
 export function CountInScreen({ left, onCancel }: CountInScreenProps) {
+  const phone = useLayout() === "phone";
+  const cancel = <Button kind="secondary" icon="close" label="Not yet" onPress={onCancel} testID="count-cancel" />;
   return (
     <Screen
       title="Get ready"
@@ -21,14 +24,21 @@ export function CountInScreen({ left, onCancel }: CountInScreenProps) {
       back="/voice"
       closes
       hideBar
-      footer={<Button kind="secondary" icon="stop" label="Not yet" onPress={onCancel} testID="count-cancel" />}
+      wide
+      footer={phone ? cancel : undefined}
     >
-      <View style={{ flexGrow: 1, minHeight: 320, alignItems: "center", justifyContent: "center", gap: 28 }}>
+      <View
+        style={{ flexGrow: 1, minHeight: phone ? 320 : 560, alignItems: "center", justifyContent: "center", gap: 28 }}
+      >
         <Text
           variant="number"
           aria-hidden
           testID="count-left"
-          style={{ fontSize: 120, lineHeight: 128, letterSpacing: -2 }}
+          style={
+            phone
+              ? { fontSize: 120, lineHeight: 128, letterSpacing: -2 }
+              : { fontSize: 176, lineHeight: 184, letterSpacing: -3 }
+          }
         >
           {String(left)}
         </Text>
@@ -48,6 +58,7 @@ export function CountInScreen({ left, onCancel }: CountInScreenProps) {
           ))}
         </View>
         <Text tone="soft">Breathe in, and sing on the beat after one.</Text>
+        {!phone && cancel}
         <LiveText hidden urgent>
           {String(left)}
         </LiveText>

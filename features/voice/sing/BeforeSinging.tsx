@@ -5,6 +5,7 @@ import { Notice } from "@/features/ui/Notice";
 import { Screen } from "@/features/ui/Screen";
 import { Text } from "@/features/ui/Text";
 import { colors } from "@/features/ui/theme";
+import { useLayout } from "@/features/ui/useLayout";
 import { webProps } from "@/features/ui/webStyle";
 import { useCountInSetting } from "../listening/countInSetting";
 import { OtherWays } from "./OtherWays";
@@ -18,6 +19,12 @@ export interface BeforeSingingProps {
 /** What will happen, how to sing, and the button that starts it. */
 export function BeforeSinging({ asking, onSing }: BeforeSingingProps) {
   const [counted, setCounted] = useCountInSetting();
+  const wide = useLayout() === "wide";
+  const asked = (
+    <LiveText variant="small" tone="soft">
+      {asking ? "Your browser asks whether this page may use the microphone. Choose to allow it." : ""}
+    </LiveText>
+  );
   return (
     <Screen
       title="Sing a few seconds"
@@ -31,24 +38,36 @@ export function BeforeSinging({ asking, onSing }: BeforeSingingProps) {
             onPress={() => onSing(counted)}
             testID="sing-start"
           />
-          <OtherWays kind="text" />
+          {!wide && <OtherWays kind="text" except="sing" />}
         </>
       }
+      wide
     >
-      <View style={{ gap: 20, paddingTop: 12, maxWidth: 560 }}>
-        <Text variant="body" style={{ fontSize: 20, lineHeight: 28 }}>
-          Sing any song you know for 5 to 20 seconds, without an instrument, and see which notes are yours.
-        </Text>
-        <Text tone="soft">The sound stays on this device. Only numbers are kept, and only if you say so.</Text>
-        <CountInSwitch on={counted} onChange={setCounted} />
-        <Cautions />
-        <LiveText variant="small" tone="soft">
-          {asking ? "Your browser asks whether this page may use the microphone. Choose to allow it." : ""}
-        </LiveText>
+      <View
+        style={
+          wide
+            ? { flexDirection: "row", alignItems: "flex-start", gap: 48, paddingTop: 12 }
+            : { gap: 20, paddingTop: 12, maxWidth: 560 }
+        }
+      >
+        <View style={[{ gap: 20 }, wide ? column : null]}>
+          <Text variant="body" style={{ fontSize: 20, lineHeight: 28 }}>
+            Sing any song you know for 5 to 20 seconds, without an instrument, and see which notes are yours.
+          </Text>
+          <Text tone="soft">The sound stays on this device. Only numbers are kept, and only if you say so.</Text>
+          <CountInSwitch on={counted} onChange={setCounted} />
+          {wide ? asked : null}
+        </View>
+        <View style={[{ gap: 28 }, wide ? column : null]}>
+          <Cautions />
+          {wide ? <OtherWays kind="list" except="sing" /> : asked}
+        </View>
       </View>
     </Screen>
   );
 }
+
+const column = { flexGrow: 1, flexBasis: 0, maxWidth: 560 } as const;
 
 function CountInSwitch({ on, onChange }: { on: boolean; onChange: (on: boolean) => void }) {
   return (

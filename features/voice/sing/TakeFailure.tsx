@@ -1,12 +1,5 @@
-import { View } from "react-native";
-import { Button } from "@/features/ui/Button";
-import { Card } from "@/features/ui/Card";
-import { Icon } from "@/features/ui/Icon";
-import { Screen } from "@/features/ui/Screen";
-import { Text } from "@/features/ui/Text";
-import { colors } from "@/features/ui/theme";
 import { failureWords } from "./failureWords";
-import { OtherWays } from "./OtherWays";
+import { RefusalPage } from "./RefusalPage";
 import type { Failure } from "../recorder/recorder";
 
 export interface TakeFailureProps {
@@ -14,37 +7,21 @@ export interface TakeFailureProps {
   onAgain: () => void;
 }
 
-/** No range came out: why, what is safe, and the two ways on. */
+/** No range came out of a take or of a recording. */
 export function TakeFailure({ failure, onAgain }: TakeFailureProps) {
-  const words = failureWords(failure);
   const file = failure.stoppedBy === "file";
   return (
-    <Screen
-      title={words.title}
-      crumb={{ label: "Voice", href: "/voice" }}
-      footer={
-        <>
-          {file ? (
-            <Button icon="file" label="Choose another recording" onPress={onAgain} testID="sing-again" />
-          ) : (
-            <Button icon="again" label="Try again" onPress={onAgain} testID="sing-again" />
-          )}
-          <OtherWays kind="secondary" recording={!file} />
-        </>
-      }
-    >
-      <View role="alert" testID={`take-failure-${failure.kind}`} style={{ paddingTop: 12, maxWidth: 560 }}>
-        <Card error style={{ gap: 12 }}>
-          <View style={{ flexDirection: "row", gap: 10 }}>
-            <Icon name="warning" size={24} color={colors.brick} />
-            <Text variant="strong" style={{ flexShrink: 1 }}>
-              {words.happened}
-            </Text>
-          </View>
-          <Text tone="soft">{words.safe}</Text>
-          <Text>{words.next}</Text>
-        </Card>
-      </View>
-    </Screen>
+    <RefusalPage
+      words={failureWords(failure)}
+      again={{
+        ...(file
+          ? { icon: "file" as const, label: "Choose another recording" }
+          : { icon: "again" as const, label: "Try again" }),
+        onPress: onAgain,
+        testID: "sing-again",
+      }}
+      except={file ? "recording" : "sing"}
+      testID={`take-failure-${failure.kind}`}
+    />
   );
 }

@@ -1,0 +1,63 @@
+import { View } from "react-native";
+import { Button } from "@/features/ui/Button";
+import { Card } from "@/features/ui/Card";
+import { Icon, type IconName } from "@/features/ui/Icon";
+import { Screen } from "@/features/ui/Screen";
+import { Text } from "@/features/ui/Text";
+import { colors } from "@/features/ui/theme";
+import { useLayout } from "@/features/ui/useLayout";
+import type { FailureWords } from "./failureWords";
+import { OtherWays, type OtherWaysProps } from "./OtherWays";
+
+export interface RefusalPageProps {
+  words: FailureWords;
+  again: { icon: IconName; label: string; onPress: () => void; testID: string };
+  /** the way that was tried */
+  except: OtherWaysProps["except"];
+  testID: string;
+}
+
+/**
+ * No notes came out: why, what is safe, what to do, and the other ways on. On a phone the next try is under the thumb;
+ * where there is room it stands with its reason, and the other ways beside them.
+ */
+export function RefusalPage({ words, again, except, testID }: RefusalPageProps) {
+  const layout = useLayout();
+  const phone = layout === "phone";
+  const wide = layout === "wide";
+  const column = wide ? { flexGrow: 1, flexBasis: 0, maxWidth: 560 } : { maxWidth: 560 };
+  return (
+    <Screen
+      title={words.title}
+      crumb={{ label: "Voice", href: "/voice" }}
+      wide
+      footer={phone ? <Button {...again} /> : undefined}
+    >
+      <View
+        style={{
+          flexDirection: wide ? "row" : "column",
+          alignItems: wide ? "flex-start" : "stretch",
+          gap: wide ? 48 : 28,
+          paddingTop: 12,
+        }}
+      >
+        <View role="alert" testID={testID} style={column}>
+          <Card error style={phone ? { gap: 12 } : { gap: 14, padding: 24 }}>
+            <View style={{ flexDirection: "row", gap: 10 }}>
+              <Icon name="warning" size={24} color={colors.brick} />
+              <Text variant="strong" style={{ flexShrink: 1 }}>
+                {words.happened}
+              </Text>
+            </View>
+            <Text tone="soft">{words.safe}</Text>
+            <Text>{words.next}</Text>
+            {!phone && <Button {...again} style={{ alignSelf: "flex-start", marginTop: 6 }} />}
+          </Card>
+        </View>
+        <View style={column}>
+          <OtherWays kind="list" except={except} />
+        </View>
+      </View>
+    </Screen>
+  );
+}

@@ -17,9 +17,15 @@ import { securityHeaders } from "./http/securityHeaders";
 import { instrumentsRoutes } from "./instruments/instruments.router";
 import { keysRoutes } from "./keys/keys.router";
 import { songsRoutes } from "./songs/songs.router";
+import type { FakeSmtp } from "./mail/inbox/fakeSmtp";
+import { inboxPage } from "./mail/inbox/inboxPage";
+import { mailRoutes } from "./mail/mail.router";
 import { voicesRoutes } from "./voices/voices.router";
 
-type AppSettings = Pick<Env, "tokenSecret" | "publicOrigin" | "trustProxy" | "staticDir">;
+type AppSettings = Pick<Env, "tokenSecret" | "publicOrigin" | "trustProxy" | "staticDir"> & {
+  /** where mails go that are really sent to nobody; shown at /dev/inbox */
+  fakeSmtp?: FakeSmtp | undefined;
+};
 
 /** Puts the server together; the only place that knows all its parts. */
 export function createApp(dataSource: DataSource, logger: Logger, settings: AppSettings): { app: Express; api: Api } {
@@ -36,6 +42,7 @@ export function createApp(dataSource: DataSource, logger: Logger, settings: AppS
   keysRoutes(api, dataSource);
   instrumentsRoutes(api, dataSource);
   chartsRoutes(api, dataSource);
+  mailRoutes(api, dataSource, settings);
   healthRoutes(api, dataSource);
   descriptionRoutes(api);
 
@@ -51,6 +58,7 @@ export function createApp(dataSource: DataSource, logger: Logger, settings: AppS
     api.router,
     unknownRoute(api),
   );
+  if (settings.fakeSmtp) app.use("/dev/inbox", inboxPage(settings.fakeSmtp));
   app.use(clientFiles(settings.staticDir));
   app.use(errorHandler);
   return { app, api };

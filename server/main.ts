@@ -3,11 +3,13 @@ import { createServer } from "node:http";
 import type { AddressInfo } from "node:net";
 import { preparePasswords } from "./auth/passwords";
 import { createApp } from "./createApp";
+import { createJobs } from "./createJobs";
 import { createDataSource } from "./database/dataSource";
 import { demoSignIns, loadDemoScenario } from "./database/demoScenario";
 import { migrate } from "./database/migrate";
 import { EnvError, readEnv } from "./env";
 import { createLogger } from "./http/requestLog";
+import { startWorker } from "./jobs/jobWorker";
 
 /** How long a request may still take after the server was told to stop. */
 const patienceMs = 5000;
@@ -26,7 +28,11 @@ async function main(): Promise<void> {
   if (env.demo) await loadDemoScenario(dataSource);
   const signIns = env.demo ? await demoSignIns(dataSource) : [];
 
-  const { app } = createApp(dataSource, logger, env);
+  const fakeSmtp =
+    env.smtpUrl === null && !env.production
+      ? await (await import("./mail/inbox/fakeSmtp")).FakeSmtp.start()
+      : undefined;
+  const { app } = createApp(dataSource, logger, { ...env, fakeSmtp });
   const server = createServer(app);
   await new Promise<void>((resolve, reject) => {
     server.once("error", (error: NodeJS.ErrnoException) => {
@@ -42,20 +48,30 @@ async function main(): Promise<void> {
     server.listen(env.port, env.host, resolve);
   });
 
+  const { port } = server.address() as AddressInfo;
+  const host = env.host.includes(":") ? `[${env.host}]` : env.host;
+  const here = `http://${host}:${port}`;
+  const origin = env.publicOrigin ?? here;
+  const jobs = createJobs(dataSource, { ...env, origin, smtpUrl: env.smtpUrl ?? fakeSmtp?.url ?? "" });
+  const worker = await startWorker(env.databaseUrl, jobs, logger);
+
   let stopping = false;
   // Ctrl-C reaches this process from the terminal and again from the start script.
   const stop = () => {
     if (stopping) return;
     stopping = true;
     setTimeout(() => server.closeAllConnections(), patienceMs).unref();
-    server.close(() => void dataSource.destroy());
+    const served = new Promise<void>((resolve) => server.close(() => resolve()));
+    void Promise.all([served, worker.stop()]).then(async () => {
+      jobs.close();
+      await Promise.all([dataSource.destroy(), fakeSmtp?.stop()]);
+    });
   };
   process.on("SIGINT", stop);
   process.on("SIGTERM", stop);
 
-  const { port } = server.address() as AddressInfo;
-  const host = env.host.includes(":") ? `[${env.host}]` : env.host;
-  say(`Larkspan is ready at ${env.publicOrigin ?? `http://${host}:${port}`}`);
+  say(`Larkspan is ready at ${origin}`);
+  if (fakeSmtp) say(`  No SMTP_URL is set, so mails are sent to nobody: read them at ${here}/dev/inbox`);
   for (const { name, role, email, password } of signIns) {
     say(`  ${name} (${role}): ${email}, password "${password}"`);
   }

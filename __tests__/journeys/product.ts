@@ -25,6 +25,7 @@ export async function startProduct(): Promise<Product> {
       ...process.env,
       NODE_ENV: "development",
       PORT: String(port),
+      PUBLIC_URL: `http://localhost:${port}`,
       DATABASE_URL: Object.assign(new URL(admin), { pathname: `/${name}` }).href,
       TOKEN_SECRET: randomUUID() + randomUUID(),
       LOG_LEVEL: "error",

@@ -80,6 +80,7 @@ it("makes its schemas from the contracts", async () => {
       "ChartPdfRequest",
       "Decision",
       "Health",
+      "MailPreferences",
       "OpenApi",
       "OwnInstrument",
       "Problem",
@@ -94,6 +95,7 @@ it("makes its schemas from the contracts", async () => {
       "SongVersionEntry",
       "Take",
       "Try",
+      "Unsubscribed",
       "Voice",
     ].sort(),
   );

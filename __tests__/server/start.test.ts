@@ -67,7 +67,13 @@ it.each(["SIGTERM", "SIGINT"] as const)(
 
 it("prints how to get into the demonstration, and only where there is one", async () => {
   const shown = start({ DATABASE_URL: database.url, PORT: "0" });
-  const hidden = start({ DATABASE_URL: database.url, PORT: "0", NODE_ENV: "production", TOKEN_SECRET: "x".repeat(32) });
+  const production = {
+    NODE_ENV: "production",
+    TOKEN_SECRET: "x".repeat(32),
+    PUBLIC_URL: "http://127.0.0.1:1",
+    SMTP_URL: "smtp://127.0.0.1:1",
+  };
+  const hidden = start({ DATABASE_URL: database.url, PORT: "0", ...production });
   for (const server of [shown, hidden]) {
     await ready(server);
     server.child.kill("SIGTERM");
@@ -96,6 +102,8 @@ it("says in plain lines, all at once, what is wrong with its environment", async
     expect.stringMatching(/^ {2}PORT must be/),
     expect.stringMatching(/^ {2}DATABASE_URL must/),
     expect.stringMatching(/^ {2}TOKEN_SECRET is required in production/),
+    expect.stringMatching(/^ {2}PUBLIC_URL is required in production/),
+    expect.stringMatching(/^ {2}SMTP_URL is required in production/),
     "",
   ]);
 });

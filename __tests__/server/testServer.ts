@@ -4,11 +4,15 @@ import { tmpdir } from "node:os";
 import path from "node:path";
 import type { Express } from "express";
 import request, { type Test } from "supertest";
+import type { DataSource } from "typeorm";
 import type { SessionResponse } from "../../shared/contract/account";
 import { createApp } from "../../server/createApp";
+import { createJobs } from "../../server/createJobs";
 import { createDataSource } from "../../server/database/dataSource";
 import type { Api } from "../../server/http/api";
 import { createLogger } from "../../server/http/requestLog";
+import { workOffQueue } from "../../server/jobs/jobWorker";
+import { FakeSmtp } from "../../server/mail/inbox/fakeSmtp";
 import { createTestDatabase, type TestDatabase } from "./testDatabase";
 
 export const tokenSecret = "a secret of the tests, long enough for HS256";
@@ -22,6 +26,11 @@ export interface TestServer {
   app: Express;
   api: Api;
   database: TestDatabase;
+  dataSource: DataSource;
+  /** where its mails go */
+  smtp: FakeSmtp;
+  /** does what waits in the queue and is due */
+  runJobs: () => Promise<void>;
   close: () => Promise<void>;
 }
 
@@ -33,18 +42,28 @@ export async function startTestServer(
   const database = await createTestDatabase();
   const dataSource = await createDataSource(database.url, () => undefined).initialize();
   const nothing = mkdtempSync(path.join(tmpdir(), "larkspan-nothing-"));
+  const smtp = await FakeSmtp.start();
   const { app, api } = createApp(dataSource, logger, {
     tokenSecret,
     publicOrigin: null,
     trustProxy: false,
     staticDir: nothing,
+    fakeSmtp: smtp,
     ...settings,
   });
+  const jobs = createJobs(dataSource, {
+    tokenSecret,
+    smtpUrl: smtp.url,
+    mailFrom: "Larkspan <no-reply@larkspan.test>",
+    origin: settings.publicOrigin ?? "http://larkspan.test",
+  });
   const close = async () => {
+    jobs.close();
+    await smtp.stop();
     if (dataSource.isInitialized) await dataSource.destroy();
     await database.drop();
   };
-  return { app, api, database, close };
+  return { app, api, database, dataSource, smtp, runJobs: () => workOffQueue(database.url, jobs), close };
 }
 
 /** Somebody with an account of their own. */

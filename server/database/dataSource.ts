@@ -10,6 +10,7 @@ import { VoiceEntity } from "../voices/voice.entity";
 import { FirstTables1764547200000 } from "./migrations/FirstTables1764547200000";
 import { KeysPerVoice1775001600000 } from "./migrations/KeysPerVoice1775001600000";
 import { KindOfTake1767225600000 } from "./migrations/KindOfTake1767225600000";
+import { MailAndJobs1782000000000 } from "./migrations/MailAndJobs1782000000000";
 import { SongRevisions1769904000000 } from "./migrations/SongRevisions1769904000000";
 import { SongVersions1772323200000 } from "./migrations/SongVersions1772323200000";
 
@@ -57,6 +58,7 @@ export function createMigrationSource(url: string): DataSource {
       SongRevisions1769904000000,
       SongVersions1772323200000,
       KeysPerVoice1775001600000,
+      MailAndJobs1782000000000,
     ],
     migrationsTransactionMode: "all",
   });

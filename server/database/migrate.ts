@@ -1,4 +1,5 @@
 import { Client } from "pg";
+import { installQueue } from "../jobs/installQueue";
 import { createMigrationSource } from "./dataSource";
 
 /** Any constant will do, as long as every start of this server names the same. */
@@ -17,6 +18,7 @@ export async function migrate(url: string): Promise<void> {
     } finally {
       await source.destroy();
     }
+    await installQueue(url);
   } finally {
     // Ending the connection gives the lock back.
     await turn.end();

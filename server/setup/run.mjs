@@ -33,7 +33,10 @@ const commands = {
     say(`The client will be at http://localhost:${port}; it passes /api on to port ${api}.`);
     await together(
       [
-        { args: ["--watch", ...server], env: { ...settings(database), PORT: api } },
+        {
+          args: ["--watch", ...server],
+          env: { PUBLIC_URL: `http://localhost:${port}`, ...settings(database), PORT: api },
+        },
         { args: [expo, "start", "--web", "--localhost", "--port", String(port)], env: quiet },
       ],
       database,

@@ -1,0 +1,41 @@
+import { createTransport } from "nodemailer";
+import type { DataSource } from "typeorm";
+import type { JobHandler, Jobs } from "./jobs/jobWorker";
+import { LinkTokensService } from "./mail/linkTokens.service";
+import { sendMailTask } from "./mail/mail.service";
+import { MailPreferencesService } from "./mail/mailPreferences.service";
+import { Postman } from "./mail/postman";
+
+interface JobSettings {
+  tokenSecret: string;
+  smtpUrl: string;
+  mailFrom: string;
+  /** where the links in mails lead */
+  origin: string;
+}
+
+/** Puts together everything that is done by jobs; the only place that knows all of it. */
+export function createJobs(dataSource: DataSource, settings: JobSettings): Jobs & { close: () => void } {
+  const { tokenSecret, smtpUrl, mailFrom, origin } = settings;
+  const transport = createTransport({
+    url: smtpUrl,
+    connectionTimeout: 10_000,
+    greetingTimeout: 10_000,
+    socketTimeout: 30_000,
+    disableFileAccess: true,
+    disableUrlAccess: true,
+  });
+  const postman = new Postman({
+    dataSource,
+    transport,
+    from: mailFrom,
+    origin,
+    tokens: new LinkTokensService(tokenSecret),
+    preferences: new MailPreferencesService(dataSource, tokenSecret),
+  });
+  const handlers: Record<string, JobHandler> = {
+    [sendMailTask]: (payload) => postman.deliver(payload),
+  };
+  const recurring: { task: string; match: string }[] = [];
+  return { handlers, recurring, close: () => transport.close() };
+}

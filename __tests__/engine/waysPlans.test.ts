@@ -2,8 +2,9 @@ import type { Instrument } from "@/shared/instruments/instrument";
 import { findPreset } from "@/shared/instruments/presets";
 import { tensionChanges } from "@/shared/instruments/tension";
 import type { KeyName } from "@/shared/music/keyName";
-import { defaultPreferences, findWays } from "@/shared/ways/findWays";
+import { findWays } from "@/shared/ways/findWays";
 import type { Way } from "@/shared/ways/way";
+import { defaultPreferences } from "@/shared/ways/wayCandidates";
 
 const major = (tonic: string): KeyName => ({ tonic, mode: "major" });
 const box = findPreset("box-adf")!;

@@ -9,6 +9,7 @@ import { keySign } from "@/shared/music/keyWords";
 import { glyphs } from "@/shared/music/pitch";
 import type { Instrument } from "@/shared/instruments/instrument";
 import type { Way } from "@/shared/ways/way";
+import { differentWays } from "@/shared/ways/wayOrder";
 import { WayList } from "./WayList";
 import { takeLabel, takeLabelIn, wayKept } from "./wayWords";
 
@@ -55,7 +56,7 @@ export function WayPane({
   const [chosen, setChosen] = useState<string | null>(null);
   const found = search.data;
   const keptWay = found ? wayKept(found, kept) : null;
-  const shown = found?.slice(0, most ?? found.length) ?? [];
+  const shown = found ? differentWays(found, most ?? found.length) : [];
   const ways = keptWay && !shown.includes(keptWay) ? [...shown, keptWay] : shown;
   const at = Math.max(
     0,

@@ -20,6 +20,8 @@ const way = (retune: number, capo: number, shapeKey: string): Way => ({
   cost: "",
   cautions: [],
   why: "",
+  travelMm: 0,
+  travel: "",
 });
 
 test.each([

@@ -18,9 +18,9 @@ let known: Wishes | null = null;
 /** Wishes as the engine weighs them. */
 export function preferencesOf(wishes: Wishes): WayPreferences {
   return {
-    barre: wishes.noBarre ? 1 : 0.4,
+    barre: wishes.noBarre ? 1 : 0.2,
     capo: wishes.noCapo ? 1 : 0.2,
-    retune: wishes.noRetune ? 1 : 0.4,
+    retune: wishes.noRetune ? 1 : 0.1,
     knownShapes: [],
     highestCapo: wishes.highestCapo,
   };

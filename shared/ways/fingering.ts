@@ -7,12 +7,6 @@ export interface Fingering {
   count: number;
 }
 
-/** One finger's work: one string, or several at the same fret. */
-interface Unit {
-  fret: number;
-  strings: number[];
-}
-
 /**
  * Finds fingers for a set of stopped strings: lower frets lower fingers, at one fret from the bass side on. One finger
  * may lie across several strings (a barre) where every string between is stopped there or higher.
@@ -24,76 +18,160 @@ interface Unit {
  * @example fingering([null, 3, 2, 0, 1, 0], 1).fingers // => [0, 3, 2, 0, 1, 0]
  */
 export function fingering(frets: readonly (number | null)[], mostBarres: number): Fingering | null {
-  const stopped: number[] = [];
-  let lowest = Infinity;
+  const hand = placeHand(frets, mostBarres);
+  if (!hand) return null;
+  const { count, barreFrom } = hand;
+  const barre = barreFrom < 0 ? null : { fret: frets[barreFrom]!, fromString: barreFrom, toString: hand.barreTo };
+  return { fingers: Array.from(hand.fingers.subarray(0, frets.length)), barre, count };
+}
+
+const mostStrings = 32;
+
+/** A hand on the neck. One object serves every search: read it before the next call. */
+export interface PlacedHand {
+  fingers: Int8Array;
+  count: number;
+  /** outer strings of the barre, -1 for none */
+  barreFrom: number;
+  barreTo: number;
+}
+
+const hand: PlacedHand = { fingers: new Int8Array(mostStrings), count: 0, barreFrom: -1, barreTo: -1 };
+/** One finger's work each: the fret, the strings as bits, the lowest and the highest of them. */
+const units = {
+  fret: new Int16Array(mostStrings),
+  strings: new Int32Array(mostStrings),
+  from: new Int8Array(mostStrings),
+  to: new Int8Array(mostStrings),
+};
+
+/**
+ * The same as {@link fingering} without making anything anew, for searches.
+ *
+ * @param frets per string: null = silent, 0 = open, else the fret; at most 32 strings
+ * @param mostBarres how many fingers may lie across strings
+ * @returns the hand, overwritten by the next call; null if four fingers cannot do it
+ */
+export function placeHand(frets: readonly (number | null)[], mostBarres: number): PlacedHand | null {
+  hand.count = 0;
+  hand.barreFrom = hand.barreTo = -1;
+  let stopped = 0;
+  let lowest = 99;
+  let highest = 0;
   let open = false;
   for (let string = 0; string < frets.length; string++) {
     const fret = frets[string]!;
+    hand.fingers[string] = 0;
     if (fret === 0) open = true;
     if (fret === null || fret === 0) continue;
-    stopped.push(string);
+    stopped++;
     if (fret < lowest) lowest = fret;
+    if (fret > highest) highest = fret;
   }
-  if (stopped.length === 0) return { fingers: frets.map(() => 0), barre: null, count: 0 };
-  const index = stopped.filter((string) => frets[string] === lowest);
-  const canBarre = index.length >= 2 && coveredAbove(frets, index, lowest);
-  const singles = stopped.length <= 4;
-  const wantsBarre = !open && (index.length >= 3 || (index.length === 2 && stopped.length >= 4));
-  const barred = canBarre && (!singles || wantsBarre);
-  const rest = stopped.filter((string) => frets[string] !== lowest);
-  const units: Unit[] = [
-    ...(barred ? [{ fret: lowest, strings: index }] : index.map((string) => ({ fret: lowest, strings: [string] }))),
-    ...rest.map((string) => ({ fret: frets[string]!, strings: [string] })),
-  ].sort((a, b) => a.fret - b.fret || a.strings[0]! - b.strings[0]!);
-  const joined = joinRuns(units, frets, barred ? mostBarres - 1 : mostBarres);
-  if (joined.length > 4) return null;
-  return assign(joined, frets.length);
+  if (stopped === 0) return hand;
+  const barred = layBarre(frets, lowest, stopped, open);
+  let count = unitsOf(frets, lowest, highest, barred);
+  for (let left = barred ? mostBarres - 1 : mostBarres; left > 0 && count > 4; left--) {
+    const joined = joinWidest(frets, count);
+    if (joined === count) break;
+    count = joined;
+  }
+  if (count > 4) return null;
+  assign(count, lowest);
+  return hand;
 }
 
-function assign(units: readonly Unit[], strings: number): Fingering {
-  const fingers = Array.from({ length: strings }, () => 0);
-  const lowest = units[0]!.fret;
+/** Whether the first finger lies across the strings at the lowest fret. */
+function layBarre(frets: readonly (number | null)[], lowest: number, stopped: number, open: boolean): boolean {
+  let from = -1;
+  let to = -1;
+  let at = 0;
+  for (let string = 0; string < frets.length; string++) {
+    if (frets[string] !== lowest) continue;
+    if (from < 0) from = string;
+    to = string;
+    at++;
+  }
+  const wanted = stopped > 4 || (!open && (at >= 3 || (at === 2 && stopped >= 4)));
+  return wanted && at >= 2 && coveredAbove(frets, from, to, lowest);
+}
+
+/** Fills the units, by fret and then from the bass side on; tells how many there are. */
+function unitsOf(frets: readonly (number | null)[], lowest: number, highest: number, barred: boolean): number {
+  let count = 0;
+  for (let fret = lowest; fret <= highest; fret++) {
+    const across = barred && fret === lowest;
+    let first = true;
+    for (let string = 0; string < frets.length; string++) {
+      if (frets[string] !== fret) continue;
+      if (across && !first) {
+        units.strings[count - 1]! |= 1 << string;
+        units.to[count - 1] = string;
+        continue;
+      }
+      first = false;
+      units.fret[count] = fret;
+      units.strings[count] = 1 << string;
+      units.from[count] = units.to[count] = string;
+      count++;
+    }
+  }
+  return count;
+}
+
+/** Lays one finger across the most neighbouring strings of one fret that it can; tells how many units are left. */
+function joinWidest(frets: readonly (number | null)[], count: number): number {
+  let at = -1;
+  let width = 1;
+  for (let k = 0; k < count; k++) {
+    if (units.from[k] !== units.to[k]) continue;
+    let last = k;
+    while (last + 1 < count && joins(frets, k, last + 1)) last++;
+    const wide = last - k + 1;
+    if (wide > 1 && (wide > width || (wide === width && units.fret[k]! > units.fret[at]!))) {
+      at = k;
+      width = wide;
+    }
+    k = last;
+  }
+  if (at < 0) return count;
+  for (let k = at + 1; k < at + width; k++) units.strings[at]! |= units.strings[k]!;
+  units.to[at] = units.to[at + width - 1]!;
+  for (let k = at + width; k < count; k++) {
+    units.fret[k - width + 1] = units.fret[k]!;
+    units.strings[k - width + 1] = units.strings[k]!;
+    units.from[k - width + 1] = units.from[k]!;
+    units.to[k - width + 1] = units.to[k]!;
+  }
+  return count - width + 1;
+}
+
+function joins(frets: readonly (number | null)[], first: number, next: number): boolean {
+  return (
+    units.from[next] === units.to[next] &&
+    units.fret[next] === units.fret[first] &&
+    coveredAbove(frets, units.from[first]!, units.from[next]!, units.fret[first]!)
+  );
+}
+
+function assign(count: number, lowest: number): void {
   let finger = 0;
-  units.forEach((unit, k) => {
+  for (let k = 0; k < count; k++) {
     // A finger a fret, as far as the fingers still to come allow.
-    const last = 4 - (units.length - 1 - k);
-    finger = Math.max(finger + 1, Math.min(1 + unit.fret - lowest, last));
-    for (const string of unit.strings) fingers[string] = finger;
-  });
-  const across = units.find((unit) => unit.strings.length > 1);
-  const barre = across
-    ? { fret: across.fret, fromString: across.strings[0]!, toString: across.strings[across.strings.length - 1]! }
-    : null;
-  return { fingers, barre, count: units.length };
-}
-
-/** Lays fingers across neighbouring strings of one fret, the widest first, until four suffice or no more may lie. */
-function joinRuns(units: readonly Unit[], frets: readonly (number | null)[], barres: number): Unit[] {
-  let joined = [...units];
-  for (let left = barres; left > 0 && joined.length > 4; left--) {
-    const widest = runs(joined, frets).sort((a, b) => b.strings.length - a.strings.length || b.fret - a.fret)[0];
-    if (!widest) break;
-    joined = [...joined.filter(({ strings }) => !widest.strings.includes(strings[0]!)), widest];
+    const last = 4 - (count - 1 - k);
+    finger = Math.max(finger + 1, Math.min(1 + units.fret[k]! - lowest, last));
+    for (let string = units.from[k]!; string <= units.to[k]!; string++)
+      if ((units.strings[k]! >> string) & 1) hand.fingers[string] = finger;
+    if (hand.barreFrom >= 0 || units.from[k] === units.to[k]) continue;
+    hand.barreFrom = units.from[k]!;
+    hand.barreTo = units.to[k]!;
   }
-  return joined.sort((a, b) => a.fret - b.fret || a.strings[0]! - b.strings[0]!);
+  hand.count = count;
 }
 
-/** Sets of two and more single-string units at one fret that one finger could stop. */
-function runs(units: readonly Unit[], frets: readonly (number | null)[]): Unit[] {
-  const found: Unit[] = [];
-  for (const { fret, strings } of units) {
-    const last = found[found.length - 1];
-    if (strings.length > 1) continue;
-    if (last?.fret === fret && coveredAbove(frets, [last.strings[0]!, strings[0]!], fret))
-      last.strings.push(strings[0]!);
-    else found.push({ fret, strings: [strings[0]!] });
-  }
-  return found.filter(({ strings }) => strings.length > 1);
-}
-
-/** Whether every string between the outer ones is stopped at this fret or higher, or silent. */
-function coveredAbove(frets: readonly (number | null)[], strings: readonly number[], fret: number): boolean {
-  for (let string = strings[0]!; string <= strings[strings.length - 1]!; string++) {
+/** Whether every string between two is stopped at this fret or higher, or silent. */
+function coveredAbove(frets: readonly (number | null)[], from: number, to: number, fret: number): boolean {
+  for (let string = from; string <= to; string++) {
     const stopped = frets[string]!;
     if (stopped !== null && stopped < fret) return false;
   }

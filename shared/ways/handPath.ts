@@ -1,118 +1,184 @@
-import { fretPosition } from "../instruments/frets";
-import type { Instrument } from "../instruments/instrument";
-import { easeOf, shapeCost } from "./shapeEase";
-import type { ShapeStock } from "./shapeLibrary";
-import type { Shape } from "./way";
+import type { SongFlow } from "./songFlow";
 
-/** One chord on the way through a song. */
-export interface PathChord {
-  /** its fingerings; null for what is no chord ("N.C."), which costs nothing */
-  stock: ShapeStock | null;
-  /** true if the player knows the usual shape of this name, false if not, null if nothing is known of the player */
-  known: boolean | null;
+/** One fingering that a chord may be played with. */
+export interface HandOption {
+  /** cost of the fingering itself */
+  cost: number;
+  /** what the player's wishes add to it */
+  dislike: number;
+  /** mm from nut or capo to the first finger; null where the hand is free */
+  handMm: number | null;
 }
 
-/** A line of shapes through a song. */
+/** One fingering for each chord. */
 export interface HandPath {
-  /** one per chord; null where the instrument cannot play it */
-  shapes: (Shape | null)[];
-  /** cost of the whole, on the scale of one shape's cost, without any preference */
-  cost: number;
-  /** strings under barres, in full six-string barres */
-  barres: number;
+  /** index of the option taken, per chord */
+  taken: number[];
+  /** what it costs as a whole, wishes included */
+  total: number;
 }
 
 /** Moving the hand this far between two chords costs 1. */
 const tiringTravelMm = 250;
-/** A chord that cannot be played costs as much as two full barres. */
-const unplayableCost = 8;
-/** What a barre over six strings costs on top at full dislike; over fewer less. */
-const barreDislike = 2;
-const fullBarre = 6;
-const unfamiliarCost = 0.8;
-const familiarFactor = 0.6;
+/** Shares of the whole: all shapes as often as they come, and the hardest alone. */
+const share = { shapes: 0.7, hardest: 0.3 };
+/** Branches looked at before the best line found so far is taken: far more than any song has been seen to need. */
+const mostBranches = 50_000;
 
-interface Step {
-  shape: Shape | null;
-  cost: number;
-  barres: number;
-  weighed: number;
-  /** mm from the nut of the lowest stopped fret; null where the hand is free */
-  handMm: number | null;
+/**
+ * What a line of fingerings costs a song through: shapes as often as they come, the hardest of them, and the way of the
+ * hand from each chord to the next.
+ *
+ * @param line one option per chord
+ * @param flow how the song goes through its chords
+ * @returns cost without wishes and with them, on the scale of one shape's cost
+ */
+export function lineCost(line: readonly HandOption[], flow: SongFlow): { plain: number; total: number } {
+  if (line.length === 0) return { plain: 0, total: 0 };
+  let shapes = 0;
+  let dislikes = 0;
+  let hardest = 0;
+  line.forEach(({ cost, dislike }, k) => {
+    shapes += flow.times[k]! * cost;
+    dislikes += flow.times[k]! * dislike;
+    hardest = Math.max(hardest, cost);
+  });
+  const travel = travelMm(line, flow) / tiringTravelMm;
+  const plain = (share.shapes * shapes + travel) / flow.played + share.hardest * hardest;
+  return { plain, total: plain + dislikes / flow.played };
 }
 
 /**
- * Chooses one shape for each chord so that shapes and hand travel together cost least.
+ * How far the hand travels along the neck, the song through.
  *
- * @param chords in the order of the song
- * @param instrument for lengths
- * @param capo fret of the capo, 0 for none
- * @param barre dislike of barres, 0 to 1
- * @returns shapes, cost and barres
+ * @param line one option per chord
+ * @param flow how the song goes through its chords
+ * @returns mm; a change to or from open strings alone counts nothing, for the hand is free
+ */
+export function travelMm(line: readonly Pick<HandOption, "handMm">[], flow: SongFlow): number {
+  let sum = 0;
+  for (let a = 1; a < line.length; a++)
+    for (let b = 0; b < a; b++) {
+      const changes = flow.changes[a]![b]!;
+      if (changes > 0) sum += changes * distance(line[a]!.handMm, line[b]!.handMm);
+    }
+  return sum;
+}
+
+/**
+ * Chooses one fingering for each chord so that shapes, hand travel in the song's own order, and wishes together cost
+ * least. Every line is weighed: branches are left only where no line in them can be better.
+ *
+ * @param chords the options of each chord, at least one each
+ * @param flow how the song goes through its chords
+ * @returns the line that costs least
  * @see S. Sayegh, Computer Music Journal 13(3), 1989: fingering as the optimum path
  */
-export function handPath(chords: readonly PathChord[], instrument: Instrument, capo: number, barre: number): HandPath {
-  const layers = chords.map((chord) => layerOf(chord, instrument, capo, barre));
-  let totals: number[] = [];
-  const cameFrom: number[][] = [];
-  layers.forEach((layer, k) => {
-    const before = layers[k - 1];
-    const origins: number[] = [];
-    totals = layer.map((step) => {
-      if (!before) return step.weighed;
-      let best = Infinity;
-      let origin = 0;
-      before.forEach((last, j) => {
-        const total = totals[j]! + travelCost(last, step);
-        if (total < best) {
-          best = total;
-          origin = j;
-        }
-      });
-      origins.push(origin);
-      return best + step.weighed;
-    });
-    cameFrom.push(origins);
-  });
-  let at = totals.indexOf(Math.min(...totals));
-  const line: Step[] = [];
-  for (let k = layers.length - 1; k >= 0; k--) {
-    line.unshift(layers[k]![at]!);
-    at = cameFrom[k]![at] ?? 0;
+export function handPath(chords: readonly (readonly HandOption[])[], flow: SongFlow): HandPath {
+  if (chords.length === 0) return { taken: [], total: 0 };
+  const search = new LineSearch(chords, flow);
+  return search.run();
+}
+
+function distance(a: number | null, b: number | null): number {
+  return a === null || b === null ? 0 : Math.abs(a - b);
+}
+
+interface Choice {
+  index: number;
+  cost: number;
+  /** its part of the total, without travel and the hardest shape's share */
+  own: number;
+  handMm: number | null;
+}
+
+/** A depth-first search with bounds. */
+class LineSearch {
+  private readonly choices: Choice[][];
+  /** the chords that weigh most come first */
+  private readonly order: number[];
+  private readonly line: (Choice | null)[];
+  private best: Choice[] = [];
+  private bestTotal = Infinity;
+  private branches = 0;
+
+  constructor(
+    chords: readonly (readonly HandOption[])[],
+    private readonly flow: SongFlow,
+  ) {
+    this.choices = chords.map((options, chord) => this.worthTaking(options, chord));
+    this.line = chords.map(() => null);
+    this.order = chords.map((_, k) => k).sort((a, b) => flow.times[b]! - flow.times[a]! || a - b);
   }
-  return summary(line);
-}
 
-function layerOf({ stock, known }: PathChord, instrument: Instrument, capo: number, barre: number): Step[] {
-  if (!stock) return [{ shape: null, cost: 0, barres: 0, weighed: 0, handMm: null }];
-  const shrink = 2 ** (-capo / 12);
-  const steps = stock.shapes.flatMap(({ shape, load }, rank): Step[] => {
-    const highest = Math.max(...shape.frets.map((fret) => fret ?? 0));
-    if (highest + capo > instrument.frets) return [];
-    const reachMm = Math.round(shape.reachMm * shrink * 10) / 10;
-    const plain = shapeCost(load, reachMm, capo);
-    const familiar = known === true && rank === 0 ? plain * familiarFactor : plain;
-    const cost = known === false ? familiar + unfamiliarCost : familiar;
-    const handMm = load.lowestFret === 0 ? null : fretPosition(instrument.scaleMm, capo + load.lowestFret);
-    const barres = load.barreStrings / fullBarre;
-    const weighed = cost + barre * barreDislike * barres;
-    return [{ shape: { ...shape, reachMm, ease: easeOf(plain) }, cost, barres, weighed, handMm }];
-  });
-  if (steps.length > 0) return steps;
-  return [{ shape: null, cost: unplayableCost, barres: 0, weighed: unplayableCost, handMm: null }];
-}
+  run(): HandPath {
+    let hardest = 0;
+    for (const choices of this.choices) hardest = Math.max(hardest, Math.min(...choices.map(({ cost }) => cost)));
+    this.walk(0, 0, hardest);
+    return { taken: this.best.map(({ index }) => index), total: this.bestTotal };
+  }
 
-function travelCost(from: Step, to: Step): number {
-  if (from.handMm === null || to.handMm === null) return 0;
-  return Math.abs(to.handMm - from.handMm) / tiringTravelMm;
-}
+  /** Without options that another one beats wherever the neighbours' hands are: going there first costs less. */
+  private worthTaking(options: readonly HandOption[], chord: number): Choice[] {
+    const { times, changes, played } = this.flow;
+    const perMm = changes[chord]!.reduce((sum, count) => sum + count, 0) / played / tiringTravelMm;
+    const choices = options.map(({ cost, dislike, handMm }, index): Choice => {
+      return { index, cost, own: (times[chord]! * (share.shapes * cost + dislike)) / played, handMm };
+    });
+    const beaten = (choice: Choice, k: number) =>
+      choices.some((other, j) => {
+        if (j === k || other.cost > choice.cost || (choice.handMm === null && other.handMm !== null)) return false;
+        const total = other.own + perMm * distance(other.handMm, choice.handMm);
+        return total < choice.own || (total === choice.own && j < k);
+      });
+    return choices.filter((choice, k) => !beaten(choice, k)).sort((a, b) => a.own - b.own || a.index - b.index);
+  }
 
-function summary(line: readonly Step[]): HandPath {
-  const shapes = line.map(({ shape }) => shape);
-  if (line.length === 0) return { shapes, cost: 0, barres: 0 };
-  const sum = line.reduce((total, { cost }) => total + cost, 0);
-  const hardest = Math.max(...line.map(({ cost }) => cost));
-  const travel = line.slice(1).reduce((total, step, k) => total + travelCost(line[k]!, step), 0);
-  const cost = (0.7 * sum + travel) / line.length + 0.3 * hardest;
-  return { shapes, cost, barres: line.reduce((total, step) => total + step.barres, 0) };
+  /** Lays down the next chord; `spent` is the total so far, `hardest` the least that the hardest shape can be. */
+  private walk(depth: number, spent: number, hardest: number): void {
+    if (depth === this.order.length) {
+      const total = spent + share.hardest * hardest;
+      if (total >= this.bestTotal) return;
+      this.bestTotal = total;
+      this.best = this.line.map((choice) => choice!);
+      return;
+    }
+    if (spent + this.rest(depth) + share.hardest * hardest >= this.bestTotal) return;
+    const chord = this.order[depth]!;
+    const next = this.choices[chord]!.map((choice) => ({ choice, sum: choice.own + this.travelTo(chord, choice) }));
+    if (next.length > 1) next.sort((a, b) => a.sum - b.sum);
+    for (const { choice, sum } of next) {
+      if (this.branches++ > mostBranches && this.best.length > 0) return;
+      this.line[chord] = choice;
+      this.walk(depth + 1, spent + sum, Math.max(hardest, choice.cost));
+    }
+    this.line[chord] = null;
+  }
+
+  /** The least that the chords not yet laid down can cost, seen from those that are. */
+  private rest(depth: number): number {
+    let sum = 0;
+    for (let k = depth; k < this.order.length; k++) {
+      const chord = this.order[k]!;
+      let least = Infinity;
+      for (const choice of this.choices[chord]!) {
+        if (choice.own >= least) break;
+        const cost = choice.own + this.travelTo(chord, choice);
+        if (cost < least) least = cost;
+      }
+      sum += least;
+    }
+    return sum;
+  }
+
+  private travelTo(chord: number, choice: Choice): number {
+    if (choice.handMm === null) return 0;
+    const changes = this.flow.changes[chord]!;
+    let mm = 0;
+    for (let other = 0; other < changes.length; other++) {
+      const laid = this.line[other];
+      if (laid && changes[other]! > 0) mm += changes[other]! * distance(choice.handMm, laid.handMm);
+    }
+    return mm / this.flow.played / tiringTravelMm;
+  }
 }

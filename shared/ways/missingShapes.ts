@@ -7,7 +7,10 @@ import type { WayChord } from "./way";
  * @param chords of a way
  * @returns names of the shapes that are missing, ASCII, in order, and how many chords there are
  */
-export function missingShapes(chords: readonly Pick<WayChord, "played" | "shape">[]): { names: string[]; of: number } {
+export function missingShapes(chords: readonly { played: string; shape: object | null }[]): {
+  names: string[];
+  of: number;
+} {
   const real = chords.filter(({ played, shape }) => shape !== null || parseChord(played) !== null);
   return { names: real.filter(({ shape }) => shape === null).map(({ played }) => played), of: real.length };
 }

@@ -10,7 +10,8 @@ export interface ShapeLoad {
   laterBarre: boolean;
   /** lowest stopped fret, 0 if all is open */
   lowestFret: number;
-  hasOpen: boolean;
+  /** strings that ring open, or at the capo */
+  openStrings: number;
   innerSilent: number;
   /** silent strings on the bass side and on the treble side */
   bassSilent: number;
@@ -41,7 +42,7 @@ export function shapeCost(load: ShapeLoad, reachMm: number, capo: number): numbe
     load.barreStrings === 0
       ? 0
       : 0.5 + 0.15 * (load.barreStrings - 2) + nearNut * load.barreStrings + (load.laterBarre ? 0.6 : 0);
-  const height = 0.1 * Math.max(0, load.lowestFret - 1) + (load.hasOpen && load.lowestFret > 4 ? 0.7 : 0);
+  const height = 0.1 * Math.max(0, load.lowestFret - 1) + (load.openStrings > 0 && load.lowestFret > 4 ? 0.7 : 0);
   const silent = 0.9 * load.innerSilent + 0.2 * load.bassSilent + 0.5 * load.trebleSilent;
   const sound = 0.3 * load.missing + (load.inverted ? 0.8 : 0);
   return 0.35 * load.fingers + barre + (reachMm / tiringReachMm) ** 1.5 + height + 0.3 * load.crossed + silent + sound;

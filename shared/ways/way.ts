@@ -24,6 +24,8 @@ export interface WayChord {
   played: string;
   /** best shape in the flow of the song; null where the instrument cannot play this chord */
   shape: Shape | null;
+  /** whether the player knows this shape; absent where nothing is known of the player */
+  known?: boolean;
 }
 
 /** One string before and after a retune. */
@@ -54,6 +56,10 @@ export interface Way {
   cost: string;
   cautions: string[];
   why: string;
+  /** how far the hand travels along the neck, the song through, mm */
+  travelMm: number;
+  /** the same in words: "The hand stays in one place." */
+  travel: string;
 }
 
 /** The player's wishes. They weigh; safety forbids. */
@@ -62,7 +68,13 @@ export interface WayPreferences {
   barre: number;
   capo: number;
   retune: number;
-  /** chord names whose usual shapes the player knows; empty = no preference */
+  /** how much to keep strings ringing open, 0 (does not matter) to 1; default 0 */
+  ringing?: number;
+  /** how much to stay with shapes that are known, 0 (does not matter) to 1; default 0.5 */
+  familiar?: number;
+  /** chord names whose usual shapes the player knows */
   knownShapes: string[];
+  /** shapes the player knows, as `shapeMark` names them; none of these and no names = no preference */
+  knownMarks?: readonly string[];
   highestCapo: number;
 }

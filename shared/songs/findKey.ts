@@ -100,7 +100,7 @@ function rankPlain(evidence: KeyEvidence, { ofChords, ofTune, chordShare, writte
 /**
  * Finds the key of a song from its chords, its tune, or both: pitch-class profiles, first and last chord or note,
  * cadences, the chords on the first, fourth and fifth step, and the tune's range; dorian and mixolydian by what only they
- * have.
+ * have. Other modes are not found: a part of a plain tune looks like them.
  *
  * @param evidence a chart, the notes of a tune, or both
  * @returns the likeliest key with the runner-up, or null if there is neither chord nor note

@@ -6,6 +6,7 @@ import { MelodyScreen } from "@/features/songs/melody/MelodyScreen";
 import { SongState } from "@/features/songs/SongState";
 import { songQueries } from "@/features/songs/songQueries";
 import { SungLine } from "@/features/voice/line/SungLine";
+import { longestTuneS } from "@/features/voice/recorder/takeProtocol";
 import { useSingingVoice } from "@/features/voice/useSingingVoice";
 import type { Song } from "@/shared/contract/song";
 
@@ -27,7 +28,7 @@ function Melody({ song }: { song: Song }) {
       voice={useSingingVoice().singing}
       instrument={instrument}
       chooser={<InstrumentSelect owned={owned} value={instrument.id} onChange={choose} />}
-      sing={(line) => <SungLine {...line} />}
+      sing={(line) => <SungLine {...line} mostS={longestTuneS} />}
       onKept={() => router.replace({ pathname: "/songs/[id]", params: { id: song.id } })}
     />
   );

@@ -6,7 +6,6 @@ import { PitchTrail } from "@/features/span/PitchTrail";
 import { StopButton } from "@/features/ui/StopButton";
 import { Text } from "@/features/ui/Text";
 import { timeOf, type LiveSound } from "../recorder/liveSound";
-import { longestTakeS } from "../recorder/takeProtocol";
 import { noteWord } from "../noteWords";
 import { noteNow } from "../listening/noteNow";
 import { useHeard } from "../listening/useHeard";
@@ -14,6 +13,7 @@ import { useHeard } from "../listening/useHeard";
 export interface LineListeningProps {
   live: LiveSound;
   seconds: number;
+  mostS: number;
   stopping: boolean;
   onStop: () => void;
 }
@@ -23,7 +23,7 @@ const behindS = 0.045;
 const trailHeight = 200;
 
 /** While a line is sung: the note now, the trail, how loud, how long, and Stop. */
-export function LineListening({ live, seconds, stopping, onStop }: LineListeningProps) {
+export function LineListening({ live, seconds, mostS, stopping, onStop }: LineListeningProps) {
   const now = useHeard(live, ({ frames, ahead }) => {
     const note = noteNow([...frames, ...ahead]);
     return note ? noteWord(note.midi) : "–";
@@ -37,7 +37,7 @@ export function LineListening({ live, seconds, stopping, onStop }: LineListening
         </Text>
         <Text variant="small" tone="soft" style={{ flexShrink: 1 }}>
           <Text style={{ fontWeight: "600" }} tone="ink" testID="take-seconds">{`${Math.floor(seconds)} s`}</Text>
-          {` of ${longestTakeS}. A longer tune is sung in pieces.`}
+          {` of ${mostS}. A longer tune is sung in pieces.`}
         </Text>
       </View>
       <Trail live={live} />

@@ -16,8 +16,10 @@ export interface Line {
 /**
  * A line sung into a page that is not about the voice: heard and judged like a take, but never kept. A take that waits
  * for its singer on the voice page stays where it is.
+ *
+ * @param mostS the line ends by itself after so many seconds
  */
-export function useLine(): Line {
+export function useLine(mostS: number): Line {
   const [state, dispatch] = useReducer(recorder, idle);
   const [live] = useState(createLiveSound);
   const capture = useRef<Capture | null>(null);
@@ -34,7 +36,7 @@ export function useLine(): Line {
   }, []);
 
   useEffect(() => {
-    const opened = createCapture(dispatch, live);
+    const opened = createCapture(dispatch, live, { mostS });
     capture.current = opened;
     opened.warmUp();
     return () => {
@@ -42,7 +44,7 @@ export function useLine(): Line {
       capture.current = null;
       forget();
     };
-  }, [live, forget]);
+  }, [live, forget, mostS]);
 
   useEffect(() => {
     if (step === "asking") {

@@ -3,6 +3,8 @@ import type { TakeReport } from "@/shared/voice/takeReport";
 
 /** A take ends by itself after this many seconds. */
 export const longestTakeS = 20;
+/** A tune that is sung into a song, as a whole. */
+export const longestTuneS = 60;
 /** A song that is tried in a key is longer. */
 export const longestTryS = 240;
 /** From here on a take usually carries a range. */

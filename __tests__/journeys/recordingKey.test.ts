@@ -32,6 +32,10 @@ test.each([
     await page.getByTestId("change-taken").waitFor({ state: "detached" });
 
     await page.getByTestId("next-step").click();
+    await page.getByRole("radio", { name: "Tap it" }).click();
+    await page.getByTestId("home-keyboard").getByTestId("key-64").click();
+    await page.getByText("Home note of the recording: E.").waitFor();
+    await page.getByRole("radio", { name: "Hum it" }).click();
     await page.getByTestId("hum-start").click();
     await page.getByText("Home note of the recording: A.").waitFor();
     await page.getByTestId("next-step").click();
@@ -41,6 +45,9 @@ test.each([
     expect(words).toContain(`Capo ${capo} does it`);
     expect(words).toContain("shapes with the capo left out");
 
+    await page.getByTestId("take-none").click();
+    await page.getByText("The chart is cleared for another one.").waitFor();
+    await page.getByTestId("undo-change").click();
     await page.getByTestId("take-transposed").click();
     await page.getByText("The chart now stands in A, and the tune went with it.").waitFor();
     await page.goto(page.url().replace(/\/recording$/, ""));

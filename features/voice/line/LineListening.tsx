@@ -6,6 +6,7 @@ import { PitchTrail } from "@/features/span/PitchTrail";
 import { StopButton } from "@/features/ui/StopButton";
 import { Text } from "@/features/ui/Text";
 import { timeOf, type LiveSound } from "../recorder/liveSound";
+import { longestTakeS } from "../recorder/takeProtocol";
 import { noteWord } from "../noteWords";
 import { noteNow } from "../listening/noteNow";
 import { useHeard } from "../listening/useHeard";
@@ -13,7 +14,7 @@ import { useHeard } from "../listening/useHeard";
 export interface LineListeningProps {
   live: LiveSound;
   seconds: number;
-  mostS: number;
+  mostS?: number;
   stopping: boolean;
   onStop: () => void;
 }
@@ -23,7 +24,7 @@ const behindS = 0.045;
 const trailHeight = 200;
 
 /** While a line is sung: the note now, the trail, how loud, how long, and Stop. */
-export function LineListening({ live, seconds, mostS, stopping, onStop }: LineListeningProps) {
+export function LineListening({ live, seconds, mostS = longestTakeS, stopping, onStop }: LineListeningProps) {
   const now = useHeard(live, ({ frames, ahead }) => {
     const note = noteNow([...frames, ...ahead]);
     return note ? noteWord(note.midi) : "–";

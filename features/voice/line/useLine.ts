@@ -2,6 +2,7 @@ import { useCallback, useEffect, useReducer, useRef, useState } from "react";
 import { createCapture, type Capture } from "../recorder/capture";
 import { createLiveSound, type LiveSound } from "../recorder/liveSound";
 import { idle, recorder, type RecorderState } from "../recorder/recorder";
+import { longestTakeS } from "../recorder/takeProtocol";
 import { dropUnkept, markTakeOfThisTab, takeOfThisTab } from "../recorder/unkeptTake";
 
 export interface Line {
@@ -19,7 +20,7 @@ export interface Line {
  *
  * @param mostS the line ends by itself after so many seconds
  */
-export function useLine(mostS: number): Line {
+export function useLine(mostS = longestTakeS): Line {
   const [state, dispatch] = useReducer(recorder, idle);
   const [live] = useState(createLiveSound);
   const capture = useRef<Capture | null>(null);

@@ -17,6 +17,7 @@ config.resolver.resolveRequest = (context, name, platform) =>
 const workers = {
   "/worklets/takeWorker.js": "features/voice/recorder/worker/takeWorker.ts",
   "/worklets/guidedWorker.js": "features/voice/guided/hearing/guidedWorker.ts",
+  "/worklets/tunerWorker.js": "features/instruments/tuner/hearing/tunerWorker.ts",
   "/worklets/songFileWorker.js": "features/songs/files/songFileWorker.ts",
 };
 const bundleWorker = (address) =>

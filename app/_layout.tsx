@@ -32,6 +32,7 @@ const parts: LazyPart[] = [
   () => import("./voice/upload"),
   () => import("./index"),
   () => import("./instruments"),
+  () => import("./instruments/tune"),
   () => import("./account/index"),
   () => import("./account/sign-in"),
   () => import("./account/sign-up"),

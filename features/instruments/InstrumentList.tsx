@@ -8,6 +8,8 @@ import { Heading } from "@/features/ui/Heading";
 import { Notice } from "@/features/ui/Notice";
 import { QueryState } from "@/features/ui/QueryState";
 import { Text } from "@/features/ui/Text";
+import { TextLink } from "@/features/ui/TextLink";
+import { tunePath } from "@/features/ui/tunePath";
 import { useLayout } from "@/features/ui/useLayout";
 import { webStyle } from "@/features/ui/webStyle";
 import { instrumentQueries, useSaveInstruments } from "./instrumentQueries";
@@ -95,6 +97,9 @@ function InstrumentCard({ offered: { instrument, own }, busy, onFavourite, onHan
             onPress={() => onHand(!instrument.leftHanded)}
             testID={`left-handed-${instrument.id}`}
           />
+          <TextLink href={tunePath(instrument.id)} testID={`tune-${instrument.id}`}>
+            Tune it
+          </TextLink>
         </View>
       </Card>
     </View>

@@ -3,7 +3,9 @@ import { Pressable, View } from "react-native";
 import { Icon } from "@/features/ui/Icon";
 import { RadioDot } from "@/features/ui/RadioDot";
 import { Text } from "@/features/ui/Text";
+import { TextLink } from "@/features/ui/TextLink";
 import { colors } from "@/features/ui/theme";
+import { tunePath } from "@/features/ui/tunePath";
 import { webProps } from "@/features/ui/webStyle";
 import type { Instrument } from "@/shared/instruments/instrument";
 import type { Way } from "@/shared/ways/way";
@@ -42,6 +44,9 @@ export function WayCard({ way, instrument, chosen, radio, onChoose }: WayCardPro
         <RadioDot on={chosen} />
       </Pressable>
       <WayGrids way={way} instrument={instrument} />
+      {chosen && (way.retune !== 0 || way.capo > 0) && (
+        <TextLink href={tunePath(instrument.id, way.retune, way.capo)}>Tune for this, string by string</TextLink>
+      )}
       {way.cautions.length > 0 && <Cautions texts={way.cautions} />}
     </>
   );

@@ -20,6 +20,7 @@ export const clientRoutes = [
   "/songs/:id/recording",
   "/songs/:id/try",
   "/instruments",
+  "/instruments/tune",
   "/account",
   "/account/sign-in",
   "/account/sign-up",

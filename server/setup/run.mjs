@@ -90,6 +90,12 @@ const commands = {
     await together([{ args, env: {} }]);
   },
 
+  async "bench:tuner"() {
+    await ensurePackages({ root, say });
+    const args = [...typescript, path.join(root, "__tests__", "bench", "tunerBench.ts"), ...process.argv.slice(3)];
+    await together([{ args, env: {} }]);
+  },
+
   async "bench:keys"() {
     await ensurePackages({ root, say });
     const args = [...typescript, path.join(root, "__tests__", "bench", "keysBench.ts"), ...process.argv.slice(3)];

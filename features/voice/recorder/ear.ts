@@ -23,7 +23,7 @@ export interface Ear {
   release(): void;
 }
 
-export function createEar(emit: (event: EarEvent) => void, live: LiveSound): Ear {
+export function createEar(emit: (event: EarEvent) => void, live: Pick<LiveSound, "atMs">): Ear {
   let microphone: Microphone | null = null;
   let round = 0;
   let watchdog: ReturnType<typeof setInterval> | null = null;

@@ -4,7 +4,7 @@ import { midiToHz } from "@/shared/music/pitch";
 const partials = [0, 1, 0.55, 0.35, 0.2, 0.12, 0.07, 0.04];
 const level = 0.22;
 const riseS = 0.06;
-const soundS = 1.1;
+const usualS = 1.1;
 const fallS = 0.22;
 
 export interface ReferenceTone {
@@ -15,7 +15,7 @@ export interface ReferenceTone {
 }
 
 /** Opened with a press, because browsers let a page sound only then. Silent where the browser has no Web Audio. */
-export function createReferenceTone(): ReferenceTone {
+export function createReferenceTone(soundS = usualS): ReferenceTone {
   const context = typeof AudioContext === "undefined" ? null : new AudioContext();
   let sounding: { stop(): void } | null = null;
   const stop = () => {

@@ -19,6 +19,7 @@ const workers = {
   "/worklets/guidedWorker.js": "features/voice/guided/hearing/guidedWorker.ts",
   "/worklets/tunerWorker.js": "features/instruments/tuner/hearing/tunerWorker.ts",
   "/worklets/songFileWorker.js": "features/songs/files/songFileWorker.ts",
+  "/worklets/wayWorker.js": "features/ways/search/wayWorker.ts",
 };
 const bundleWorker = (address) =>
   esbuild.buildSync({

@@ -18,7 +18,7 @@ const parts: LazyPart[] = [
   () => import("./songs/[id]/together"),
   () => import("./songs/[id]/try"),
   () => import("./songs/[id]/ways"),
-  () => import("@/shared/ways/findWays"),
+  () => import("@/features/ways/search/waySearch").then(({ openWaySearch }) => openWaySearch()),
   () => import("./songs/[id]/edit"),
   () => import("./songs/[id]/history"),
   () => import("./songs/[id]/melody"),

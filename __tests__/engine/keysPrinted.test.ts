@@ -6,7 +6,8 @@ import { parseNoteName } from "@/shared/music/pitch";
 import { parseKeyName } from "@/shared/music/keyName";
 import { cycleDose, tessitura, tessituragram } from "@/shared/songs/tessituragram";
 import { notesOf } from "../bench/keyScores";
-import { amongBestTwo, printedKeyHits, usualBand } from "./printedKeyHits";
+import { amongBestTwo, printedKeyHits } from "./printedKeyHits";
+import { middleRanges, unisonBand, unisonReadings, usualBand } from "./unisonBands";
 import { bestPlaces, voicePairMoves } from "./voicePairMoves";
 import { printedKeys } from "./tunes/printedKeys";
 import { knownSongs } from "./tunes/knownSongs";
@@ -24,9 +25,16 @@ describe("keys that hymnals and songbooks print", () => {
   });
 
   test("the printed key is among our best two in at least 80 %, for the usual unison band", () => {
-    const hits = printedKeyHits(usualBand);
+    const hits = printedKeyHits(usualBand.voice);
     expect(hits.every(({ place }) => place >= 1 && place <= 12)).toBe(true);
     expect(amongBestTwo(hits)).toBeGreaterThanOrEqual(0.8);
+  });
+
+  test("so it is within the other published range of the middle voice, and among the keys that books have", () => {
+    const within = (range: (typeof middleRanges)[number]) => unisonBand(unisonReadings[0]!, range)!.voice;
+    for (const range of middleRanges.slice(0, 2))
+      for (const mostAccidentals of [7, 4])
+        expect(amongBestTwo(printedKeyHits(within(range), mostAccidentals))).toBeGreaterThanOrEqual(0.8);
   });
 });
 
@@ -54,10 +62,19 @@ describe("published ranges by voice type", () => {
     expect(men).toEqual(moved(women!, -12));
   });
 
-  test("for two of them the best key moves by what the voices differ, give or take a semitone, in every tune", () => {
-    const moves = voicePairMoves();
+  const moves = voicePairMoves();
+
+  test("for two of them the best keys move by what the voices differ, give or take a semitone, in every tune", () => {
     expect(moves).toHaveLength(printedKeys.length * 15);
     expect(moves.filter(({ offBy }) => offBy > 1)).toEqual([]);
+  });
+
+  test("so does the first place wherever one key alone is best; where several are, accidentals choose among them", () => {
+    const alone = moves.filter((move) => move.alone);
+    expect(alone.length).toBeGreaterThan(50);
+    expect(alone.filter(({ firstOffBy }) => firstOffBy > 1)).toEqual([]);
+    for (const [, tune] of tunes)
+      for (const { voice } of single) expect(bestPlaces(tune, voice)).toContain(scoreKeys(tune, voice)[0]!.lowMidi);
   });
 
   test.each([1, 5])("a voice %i semitones higher has its best keys exactly that much higher", (by) => {

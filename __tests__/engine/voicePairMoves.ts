@@ -6,16 +6,18 @@ import { notesOf } from "../bench/keyScores";
 import { knownSongs } from "./tunes/knownSongs";
 import { printedKeys } from "./tunes/printedKeys";
 
-/** How far the best key of a tune moves from a higher voice to a lower one. */
+/** How the best key of a tune moves from a higher voice to a lower one. */
 export interface PairMove {
   tune: string;
   high: string;
   low: string;
   /** semitones between the middles of the two published ranges */
   differ: number;
-  /** how far the move is from that; of several keys with the best score, the nearest */
+  /** one key alone has the best score, for both of them */
+  alone: boolean;
+  /** how far the move of the middle of the best keys is from that; with one best key each, of that key */
   offBy: number;
-  /** the same for the keys that stand first, ties broken by accidentals, which know nothing of voices */
+  /** the same for the keys that stand first; among equal scores these are chosen by accidentals, not by the voice */
   firstOffBy: number;
 }
 
@@ -28,14 +30,22 @@ export function voicePairMoves(): PairMove[] {
     const tune: Tune = { kind: "melody", notes: notesOf(song), home: tonic };
     const judged = single.map(({ id, voice }) => {
       const middle = (voice.range.lowMidi + voice.range.highMidi) / 2;
-      return { id, middle, best: bestPlaces(tune, voice), first: scoreKeys(tune, voice)[0]!.lowMidi };
+      const best = bestPlaces(tune, voice);
+      const sum = best.reduce((total, place) => total + place, 0);
+      return { id, middle, best, centre: sum / best.length, first: scoreKeys(tune, voice)[0]!.lowMidi };
     });
     return judged.flatMap((high, k) =>
       judged.slice(k + 1).map((low) => {
         const differ = high.middle - low.middle;
-        const off = high.best.flatMap((a) => low.best.map((b) => Math.abs(a - b - differ)));
-        const firstOffBy = Math.abs(high.first - low.first - differ);
-        return { tune: name, high: high.id, low: low.id, differ, offBy: Math.min(...off), firstOffBy };
+        return {
+          tune: name,
+          high: high.id,
+          low: low.id,
+          differ,
+          alone: high.best.length === 1 && low.best.length === 1,
+          offBy: Math.abs(high.centre - low.centre - differ),
+          firstOffBy: Math.abs(high.first - low.first - differ),
+        };
       }),
     );
   });

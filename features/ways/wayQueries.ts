@@ -2,6 +2,7 @@ import { queryOptions, skipToken, useQueries } from "@tanstack/react-query";
 import type { Instrument } from "@/shared/instruments/instrument";
 import type { KeyName } from "@/shared/music/keyName";
 import type { Way } from "@/shared/ways/way";
+import { searchWays } from "./search/waySearch";
 import { preferencesOf, type Wishes } from "./wishes";
 
 /** A song's chords, where they stand, and on what they are to be played. */
@@ -13,29 +14,19 @@ export interface Playing {
   wishes: Wishes;
 }
 
-let turn: Promise<void> = Promise.resolve();
-
-/** One search after the other, with a breath between them in which the page answers. */
-function nextTurn(): Promise<void> {
-  turn = turn.then(() => new Promise((resolve) => setTimeout(resolve, 0)));
-  return turn;
-}
-
 export const wayQueries = {
-  /** The ways into one key, best first. Searched on this device; the search is fetched when it is first wanted. */
+  /** The ways into one key, best first. Searched on this device, beside the page. */
   into: (playing: Playing | null, to: KeyName | null) =>
     queryOptions({
       queryKey: ["ways", playing, to],
-      queryFn: playing && to && playing.chords.length > 0 ? () => search(playing, to) : skipToken,
+      queryFn: playing && to && playing.chords.length > 0 ? ({ signal }) => search(playing, to, signal) : skipToken,
       staleTime: Infinity,
       retry: false,
     }),
 };
 
-async function search({ chords, from, instrument, wishes }: Playing, to: KeyName): Promise<Way[]> {
-  const { findWays } = await import("@/shared/ways/findWays");
-  await nextTurn();
-  return findWays({ chords, from, to, instrument, preferences: preferencesOf(wishes) });
+function search({ chords, from, instrument, wishes }: Playing, to: KeyName, signal: AbortSignal): Promise<Way[]> {
+  return searchWays({ chords, from, to, instrument, preferences: preferencesOf(wishes) }, signal);
 }
 
 /** The ways into each key, best first: undefined while they are searched, null where there is nothing to search. */

@@ -10,8 +10,6 @@ import type { SharedSinger } from "./sharedSinger";
 export interface Singer {
   name: string;
   voice: SingingVoice;
-  /** how many sing like this one; counts where keys are equally fair, default 1 */
-  weight?: number;
 }
 
 /** One key, judged for several singers. */
@@ -20,7 +18,7 @@ export interface SharedKey {
   tonic: string;
   /** the score of the one who is worst off in it, 0 to 100 */
   worst: number;
-  /** mean of the scores by weight, 0 to 100, not rounded */
+  /** mean of the scores, 0 to 100, not rounded */
   mean: number;
   /** somebody cannot sing all of it */
   beyond: boolean;
@@ -42,7 +40,7 @@ export interface SharedKey {
  * @param singers at least one
  * @param options mode and present key
  * @returns twelve keys, fairest first; further ties by fewest accidentals, then by closeness to the present key
- * @throws RangeError if nobody sings, a weight is not above 0, or tune or a voice is refused by scoreKeys
+ * @throws RangeError if nobody sings, or tune or a voice is refused by scoreKeys
  * @see A. Sen, Collective Choice and Social Welfare, 1970, on the leximin order
  */
 export function scoreSharedKeys(
@@ -51,8 +49,6 @@ export function scoreSharedKeys(
   options: Pick<KeyOptions, "mode" | "presentKey"> = {},
 ): SharedKey[] {
   if (singers.length === 0) throw new RangeError("at least one singer is needed");
-  if (singers.some(({ weight = 1 }) => !(weight > 0 && Number.isFinite(weight))))
-    throw new RangeError("the weight of a singer is a number above 0");
   const mode = options.mode ?? "major";
   const first = singers.map(({ voice }, k) => indexOfSame(singers, voice, k));
   const judged = singers.map(({ voice }) => byPitchClass(scoreKeys(tune, voice, options)));
@@ -64,7 +60,7 @@ export function scoreSharedKeys(
     const key: SharedKey = {
       tonic,
       worst: Math.min(...distinct),
-      mean: weightedMean(each, singers),
+      mean: meanScore(each),
       beyond: each.some(({ beyond }) => beyond),
       singers: each,
       reason: sharedKeyReason(each, spelling),
@@ -113,12 +109,8 @@ function singerIn(name: string, voice: SingingVoice, key: KeyScore): SharedSinge
   };
 }
 
-/** Added by size, so that the order of the singers cannot change the last digit. */
-function weightedMean(each: readonly SharedSinger[], singers: readonly Singer[]): number {
-  const sum = (values: number[]) => values.sort((a, b) => a - b).reduce((total, value) => total + value, 0);
-  const points = sum(each.map(({ score }, k) => score * (singers[k]!.weight ?? 1)));
-  const mean = points / sum(singers.map(({ weight = 1 }) => weight));
-  return Math.round(mean * 1e9) / 1e9;
+function meanScore(each: readonly SharedSinger[]): number {
+  return Math.round((each.reduce((sum, { score }) => sum + score, 0) / each.length) * 1e9) / 1e9;
 }
 
 function leximin(a: readonly number[], b: readonly number[]): number {

@@ -41,6 +41,7 @@ function screens(ferry: string): [path: string, ready: (page: Page) => Promise<u
     [`/songs/${ferry}/keys`, (page) => page.getByText("The Half-Past-Nine Ferry").first().waitFor()],
     [`/songs/${ferry}/together`, (page) => page.getByTestId("together-empty").waitFor()],
     [`/songs/${ferry}/compare?keys=-7,-8,-6`, (page) => page.getByTestId("compare").waitFor()],
+    [`/songs/${ferry}/try?key=C&shift=-7`, (page) => page.getByTestId("sing-start").waitFor()],
     [`/songs/${ferry}/ways`, (page) => page.getByTestId("ways").waitFor()],
     ["/instruments", (page) => page.getByTestId("instrument-ukulele").waitFor()],
     ["/account", (page) => page.getByTestId("account-email").waitFor()],

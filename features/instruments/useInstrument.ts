@@ -3,7 +3,7 @@ import { newId } from "@/features/api/newId";
 import type { OwnInstrument } from "@/shared/contract/instrument";
 import type { Instrument } from "@/shared/instruments/instrument";
 import { instrumentQueries, useSaveInstruments } from "./instrumentQueries";
-import { chosenInstrument, makeFavourite } from "./myInstruments";
+import { chosenInstrument, makeFavourite, offeredInstruments } from "./myInstruments";
 import { tryInstrument, useTrial } from "./trialInstrument";
 
 /**
@@ -36,4 +36,10 @@ export function useInstrument(
         save.mutate(makeFavourite(owned, instrument.id, newId));
     },
   };
+}
+
+/** Every instrument that can be chosen, one's own among them, by id and name. */
+export function useInstrumentNames(): { id: string; name: string }[] {
+  const { data } = useQuery(instrumentQueries.all());
+  return offeredInstruments(data ?? []).map(({ instrument: { id, name } }) => ({ id, name }));
 }

@@ -17,6 +17,7 @@ const evenings = { voice, voices: [voice, other], forKeys: singing };
 
 beforeEach(async () => {
   kept.clear();
+  localStorage.clear();
   refuseStorage(null);
   queryClient.clear();
   await shelf.put("songs", song);

@@ -1,19 +1,22 @@
 import { useQuery } from "@tanstack/react-query";
-import { useMemo, useState } from "react";
+import { useMemo } from "react";
 import { newId } from "@/features/api/newId";
-import type { Decision } from "@/shared/contract/decision";
+import type { Decision, EarlierChoice } from "@/shared/contract/decision";
 import type { Song } from "@/shared/contract/song";
 import type { SingingVoice } from "@/shared/keys/keyScore";
+import { presets } from "@/shared/instruments/presets";
 import { COARSE_WORDS } from "@/shared/keys/keyReason";
 import type { KeyName } from "@/shared/music/keyName";
 import { keySign } from "@/shared/music/keyWords";
 import { glyphs } from "@/shared/music/pitch";
 import { canComeBack, decide, decidedElsewhere, takenBack, type Choice } from "./decision/decide";
 import { decisionHistory, type DecisionHistory } from "./decision/decisionHistory";
+import { useGoneDecisions } from "./decision/goneDecisions";
 import { decisionFor, decisionQueries, useRemoveDecision, useSaveDecision } from "./decision/decisionQueries";
 import { noFitWords, wholeVoice, type KeyRow } from "./keyRows";
 import { triesOfVoice, voiceAfter } from "./tryout/kept/triedRows";
 import { tryQueries, useSendWaiting } from "./tryout/tryQueries";
+import { sameKey } from "./sameKey";
 import { keyInHand, keyRowsOf, songChords, writtenKeyOf, type KeyInHand } from "./songKeys";
 
 /** The keys of one song for one voice, with what was decided and the way to decide anew. */
@@ -34,7 +37,7 @@ export interface SongKeys {
   written: { chords: string[]; from: KeyName } | null;
   /** what was decided before and for other voices */
   history: DecisionHistory | null;
-  /** the key that was just taken back or let go of, while it can be brought back */
+  /** the key that was last taken back or let go of, while it can be brought back */
   removed: string | null;
   saving: boolean;
   error: Error | null;
@@ -44,8 +47,10 @@ export interface SongKeys {
   undo: () => void;
   /** Lets the decided key go with all its history. */
   remove: () => void;
-  /** Brings back what was just taken back or let go. */
+  /** Brings back what was last taken back or let go. */
   restore: () => void;
+  /** Takes a choice of the history anew. */
+  again: (choice: EarlierChoice) => void;
 }
 
 /** The voice that the keys are scored for, with its notes, and the voices there are. */
@@ -55,7 +60,12 @@ interface Singer {
   forKeys: SingingVoice | null;
 }
 
-export function useSongKeys(song: Song, { voice: singer, voices, forKeys }: Singer): SongKeys {
+/** @param instruments what a decision may name, own ones among them */
+export function useSongKeys(
+  song: Song,
+  { voice: singer, voices, forKeys }: Singer,
+  instruments: readonly { id: string; name: string }[] = presets,
+): SongKeys {
   const decisions = useQuery(decisionQueries.all());
   const save = useSaveDecision();
   const remove = useRemoveDecision();
@@ -68,16 +78,18 @@ export function useSongKeys(song: Song, { voice: singer, voices, forKeys }: Sing
   const singing = tried?.voice ?? null;
   const rows = useMemo(() => keyRowsOf(song, singing), [song, singing]);
   const voice = useMemo(() => singing && wholeVoice(singing), [singing]);
-  const [gone, setGone] = useState<Decision | null>(null);
+  const past = useGoneDecisions();
   const singerId = singer?.id ?? null;
   const decision = decisionFor(decisions.data ?? [], song.id, singerId);
   const mode = writtenKeyOf(song)?.mode ?? "major";
   // Another voice's key is told here, and changed only where that voice sings.
   const own = decision && !decidedElsewhere(decision, singerId) ? decision : null;
   const letGo = () => {
-    if (own) remove.mutate(own.id, { onSuccess: () => setGone(own) });
+    if (own) remove.mutate(own.id, { onSuccess: () => past.keep(own) });
   };
-  const lost = gone && canComeBack(gone, decisions.data ?? [], song.id, singerId) ? gone : null;
+  const lost = decisions.data
+    ? past.gone.find((each) => canComeBack(each, decisions.data, song.id, singerId))
+    : undefined;
   const inHand = useMemo(() => keyInHand(song, rows, decision, singerId), [song, rows, decision, singerId]);
   const written = useMemo(() => {
     const from = writtenKeyOf(song);
@@ -98,8 +110,16 @@ export function useSongKeys(song: Song, { voice: singer, voices, forKeys }: Sing
     noFit: rows && noFitWords(rows),
     inHand,
     written,
-    history: decision && decisionHistory(decision, decisions.data ?? [], mode, voices),
-    removed: lost && glyphs(keySign({ tonic: lost.tonic, mode })),
+    history:
+      decision &&
+      decisionHistory(decision, {
+        all: decisions.data ?? [],
+        gone: past.gone.filter((each) => each !== lost),
+        written: writtenKeyOf(song),
+        voices,
+        instruments,
+      }),
+    removed: lost ? glyphs(keySign({ tonic: lost.tonic, mode })) : null,
     saving: save.isPending || remove.isPending,
     error: save.error ?? remove.error,
     take: (choice, done) => {
@@ -117,18 +137,20 @@ export function useSongKeys(song: Song, { voice: singer, voices, forKeys }: Sing
     },
     undo: () => {
       const before = own && takenBack(own);
-      if (before) save.mutate(before, { onSuccess: () => setGone(own) });
+      if (before) save.mutate(before, { onSuccess: () => past.keep(own) });
       else letGo();
     },
     remove: letGo,
     restore: () => {
-      if (lost) save.mutate(lost, { onSuccess: () => setGone(null) });
+      if (lost) save.mutate(lost, { onSuccess: () => past.forget(lost) });
+    },
+    again: ({ tonic, shift, score, reason, instrument, way }) => {
+      const { voiceId } = own ?? { voiceId: singerId };
+      const choice = { songId: song.id, voiceId, tonic, shift, score, reason, instrument, way };
+      save.mutate(decide(choice, own, newId, new Date()));
     },
   };
 }
-
-/** The same key, though perhaps in another octave: a group's key moves each voice to where it sings it. */
-const sameKey = (a: number, b: number) => (a - b) % 12 === 0;
 
 /** The decision, where it was made for this key and with the present voice. */
 export function decidedHere({ decision, decided }: Pick<SongKeys, "decision" | "decided">, shift: number) {

@@ -2,7 +2,7 @@ import { useQuery } from "@tanstack/react-query";
 import { useLocalSearchParams } from "expo-router";
 import { InstrumentSelect } from "@/features/instruments/InstrumentSelect";
 import { stringWords } from "@/features/instruments/myInstruments";
-import { useInstrument } from "@/features/instruments/useInstrument";
+import { useInstrument, useInstrumentNames } from "@/features/instruments/useInstrument";
 import { CompareScreen } from "@/features/keys/compare/CompareScreen";
 import { askedPins, pinnedRows, usePins } from "@/features/keys/compare/pins";
 import { useSongKeys } from "@/features/keys/useSongKeys";
@@ -27,7 +27,7 @@ function Compare({ song }: { song: Song }) {
   const { keys: asked } = useLocalSearchParams<{ keys?: string }>();
   const singer = useSingingVoice();
   const [wishes] = useWishes();
-  const keys = useSongKeys(song, singer);
+  const keys = useSongKeys(song, singer, useInstrumentNames());
   const { pins } = usePins(song.id);
   const { instrument, owned, choose } = useInstrument(song.id, keys.decision?.instrument ?? null);
   const rows = pinnedRows(keys.rows ?? [], asked === undefined ? pins : askedPins(asked));

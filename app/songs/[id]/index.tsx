@@ -2,7 +2,7 @@ import { useQuery } from "@tanstack/react-query";
 import { useLocalSearchParams, useRouter } from "expo-router";
 import { useState } from "react";
 import { instrumentWords } from "@/features/instruments/myInstruments";
-import { useInstrument } from "@/features/instruments/useInstrument";
+import { useInstrument, useInstrumentNames } from "@/features/instruments/useInstrument";
 import { DecisionCard } from "@/features/keys/decision/DecisionCard";
 import { TryLink } from "@/features/keys/tryout/TryLink";
 import { KeyPane } from "@/features/keys/KeyPane";
@@ -32,7 +32,7 @@ export default function SongRoute() {
 function SongPage({ song }: { song: Song }) {
   const [router, remove, singer] = [useRouter(), useRemoveSong(), useSingingVoice()];
   const [[wishes], [looked, setLooked]] = [useWishes(), useState<number | null>(null)];
-  const keys = useSongKeys(song, singer);
+  const keys = useSongKeys(song, singer, useInstrumentNames());
   const { instrument, settle } = useInstrument(song.id, keys.decision?.instrument ?? null);
   const { row, key, shift, decision } = keyInView(keys, looked);
   const shown = useLayout() === "wide" && keys.written;

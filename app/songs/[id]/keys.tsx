@@ -2,7 +2,7 @@ import { useQuery } from "@tanstack/react-query";
 import { useLocalSearchParams } from "expo-router";
 import { InstrumentSelect } from "@/features/instruments/InstrumentSelect";
 import { stringWords } from "@/features/instruments/myInstruments";
-import { useInstrument } from "@/features/instruments/useInstrument";
+import { useInstrument, useInstrumentNames } from "@/features/instruments/useInstrument";
 import { KeysScreen } from "@/features/keys/KeysScreen";
 import { useSongKeys } from "@/features/keys/useSongKeys";
 import { SongState } from "@/features/songs/SongState";
@@ -26,7 +26,7 @@ export default function KeysRoute() {
 function Keys({ song }: { song: Song }) {
   const singer = useSingingVoice();
   const [wishes] = useWishes();
-  const keys = useSongKeys(song, singer);
+  const keys = useSongKeys(song, singer, useInstrumentNames());
   const { instrument, owned, choose } = useInstrument(song.id, keys.decision?.instrument ?? null);
   const wide = useLayout() === "wide";
   const rows = keys.rows ?? [];

@@ -2,7 +2,7 @@ import { useQuery } from "@tanstack/react-query";
 import { useLocalSearchParams } from "expo-router";
 import { InstrumentSelect } from "@/features/instruments/InstrumentSelect";
 import { instrumentWords } from "@/features/instruments/myInstruments";
-import { useInstrument } from "@/features/instruments/useInstrument";
+import { useInstrument, useInstrumentNames } from "@/features/instruments/useInstrument";
 import { DecisionCard } from "@/features/keys/decision/DecisionCard";
 import { askedKey } from "@/features/keys/songKeys";
 import { decidedHere, useSongKeys } from "@/features/keys/useSongKeys";
@@ -30,7 +30,7 @@ export default function WaysRoute() {
 function Ways({ song }: { song: Song }) {
   const asked = useLocalSearchParams<{ key?: string; shift?: string }>();
   const [wishes] = useWishes();
-  const keys = useSongKeys(song, useSingingVoice());
+  const keys = useSongKeys(song, useSingingVoice(), useInstrumentNames());
   const { instrument, owned, choose, settle, error } = useInstrument(song.id, keys.decision?.instrument ?? null);
   const { key, shift } = askedKey(song, keys.inHand, asked.key, asked.shift);
   const search = useQuery(wayQueries.into(keys.written && { ...keys.written, instrument, wishes }, key));

@@ -1,5 +1,6 @@
 import { useCallback, useSyncExternalStore } from "react";
 import type { KeyRow } from "../keyRows";
+import { sameKey } from "../sameKey";
 
 /** No more than so many keys stand side by side. */
 export const mostPins = 4;
@@ -34,7 +35,7 @@ export function turnPin(pins: readonly number[], shift: number): readonly number
 /** The rows of pinned moves, in the order they were pinned. A voice in another octave sings the same key elsewhere. */
 export function pinnedRows(rows: readonly KeyRow[], pins: readonly number[]): KeyRow[] {
   const found = pins.flatMap((pin) => {
-    const same = rows.filter(({ shift }) => (shift - pin) % 12 === 0);
+    const same = rows.filter(({ shift }) => sameKey(shift, pin));
     return same.find(({ shift }) => shift === pin) ?? same[0] ?? [];
   });
   return [...new Set(found)].slice(0, mostPins);

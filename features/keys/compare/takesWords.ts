@@ -1,5 +1,6 @@
 import type { Try } from "@/shared/contract/try";
 import { glyphs, noteName } from "@/shared/music/pitch";
+import { sameKey } from "../sameKey";
 import { effortWords } from "../tryout/report/effortWords";
 
 const percentOf = (share: number) => `${Math.round(100 * share)} %`;
@@ -11,7 +12,7 @@ export function takesIn<Some extends Try>(
   voiceId: string | null,
   shift: number,
 ): Some[] {
-  return tries.filter((each) => each.songId === songId && each.voiceId === voiceId && (each.shift - shift) % 12 === 0);
+  return tries.filter((each) => each.songId === songId && each.voiceId === voiceId && sameKey(each.shift, shift));
 }
 
 /** "2 tries, best 92 % in tune" */

@@ -5,7 +5,9 @@ import { kept, refuseStorage } from "@/__tests__/client/memoryIdb";
 import { queryClient } from "@/features/api/queryClient";
 import { shelf } from "@/features/api/shelf";
 import { useSongKeys } from "../useSongKeys";
+import { presentChoice } from "@/shared/contract/decisionHistory";
 import { DecisionCard } from "./DecisionCard";
+import { readGone } from "./goneDecisions";
 
 jest.mock("idb-keyval", () => jest.requireActual<{ memoryIdb: object }>("@/__tests__/client/memoryIdb").memoryIdb);
 
@@ -15,6 +17,7 @@ const singing = { range: { lowMidi: 51, highMidi: 74 }, comfort: { lowMidi: 55, 
 
 beforeEach(async () => {
   kept.clear();
+  localStorage.clear();
   refuseStorage(null);
   queryClient.clear();
   await shelf.put("songs", song);
@@ -22,8 +25,14 @@ beforeEach(async () => {
   await shelf.put("voices", ilse);
 });
 
-function Page({ voice }: { voice: typeof maren | null }) {
-  const keys = useSongKeys(song, { voice, voices: [maren, ilse], forKeys: singing });
+function Page({
+  voice,
+  instruments,
+}: {
+  voice: typeof maren | null;
+  instruments: { id: string; name: string }[] | undefined;
+}) {
+  const keys = useSongKeys(song, { voice, voices: [maren, ilse], forKeys: singing }, instruments);
   const take = (tonic: string, shift: number) => () =>
     keys.take({ tonic, shift, instrument: "box-gdg", way: { retune: 0, capo: 3, shapeKey: "G" } });
   return (
@@ -36,14 +45,14 @@ function Page({ voice }: { voice: typeof maren | null }) {
   );
 }
 
-function open(voice: typeof maren | null = maren) {
+function open(voice: typeof maren | null = maren, instruments?: { id: string; name: string }[]) {
   const view = (of: typeof maren | null) => (
     <QueryClientProvider client={queryClient}>
-      <Page voice={of} />
+      <Page voice={of} instruments={instruments} />
     </QueryClientProvider>
   );
   const page = render(view(voice));
-  return { sing: (of: typeof maren | null) => page.rerender(view(of)) };
+  return { sing: (of: typeof maren | null) => page.rerender(view(of)), leave: page.unmount };
 }
 
 const press = (id: string) => fireEvent.click(screen.getByTestId(id));
@@ -85,7 +94,7 @@ test("the history opens and closes: what was decided before, and for other voice
   expect(screen.getByTestId("key-history").getAttribute("aria-expanded")).toBe("true");
   expect(within(screen.getByRole("list", { name: "Before that" })).getAllByRole("listitem")).toHaveLength(1);
   expect(past()).toEqual([
-    expect.stringMatching(/^C.* · Box guitar, G-D-G: capo 3, chords in G.*Judged by the span alone\.$/),
+    expect.stringMatching(/^C.* · Box guitar, G-D-G: capo 3, chords in G.*Judged by the span alone\.Use again$/),
     expect.stringMatching(/^FIlse · 5 March 2026Ilse sings higher\.$/),
     expect.stringMatching(/^GWhoever sings · 5 March 2026For the whole class\.$/),
   ]);
@@ -186,4 +195,55 @@ test("a removal that fails is told and the key stays", async () => {
   expect((await screen.findByRole("alert")).textContent).toMatch(/no room left/);
   expect(card()).toMatch(/^C/);
   expect(screen.queryByTestId("bring-back")).toBeNull();
+});
+
+test("what was taken back is offered after a reload too, for a month", async () => {
+  await shelf.put("decisions", aDecision(song.id, maren.id));
+  const { leave } = open();
+  await screen.findByTestId("decided");
+  press("undo-key");
+  await screen.findByTestId("bring-back");
+  leave();
+  open();
+  await screen.findByText("C is not your key any more.");
+  press("bring-back");
+  await waitFor(() => expect(card()).toMatch(/^C/));
+  expect(await shelf.list("decisions")).toHaveLength(1);
+  leave();
+  const all = readGone(
+    JSON.stringify([{ account: null, goneAt: "2026-03-05T12:00:00Z", decision: aDecision(song.id, null) }]),
+    Date.parse("2026-04-05T12:00:00Z"),
+  );
+  expect(all).toEqual([]);
+});
+
+test("the history offers every choice again: an earlier one, and one that was taken back", async () => {
+  open();
+  await takeBoth();
+  press("undo-key");
+  await waitFor(() => expect(card()).toMatch(/^C/));
+  fireEvent.click(screen.getByText("take C"));
+  await waitFor(() => expect(screen.queryByTestId("bring-back")).toBeNull());
+  press("key-history");
+  const takenBack = screen.getByRole("list", { name: "Taken back" });
+  expect(takenBack.textContent).toMatch(/^B♭/);
+  fireEvent.click(within(takenBack).getByRole("button", { name: /^Use B♭ of .* again$/ }));
+  await waitFor(() => expect(card()).toMatch(/^B♭/));
+  expect(screen.queryByRole("list", { name: "Taken back" })).not.toBeNull();
+  fireEvent.click(within(screen.getByRole("list", { name: "Before that" })).getAllByRole("button")[0]!);
+  await waitFor(() => expect(card()).toMatch(/^C/));
+  const [one] = await shelf.list("decisions");
+  expect(one).toMatchObject({ tonic: "C", voiceId: maren.id });
+  expect(one!.earlier.map(({ tonic }) => tonic)).toEqual(["Bb", "C", "C"]);
+});
+
+test("an instrument of one's own is named; what is gone is not, and what no longer fits the chart is not offered", async () => {
+  const way = { retune: 0, capo: 3, shapeKey: "A" };
+  const earlier = [presentChoice(aDecision(song.id, maren.id, { tonic: "F", shift: 0, instrument: "sold", way }))];
+  await shelf.put("decisions", aDecision(song.id, maren.id, { instrument: "mine", way, earlier }));
+  open(maren, [{ id: "mine", name: "Box of the slipway" }]);
+  await waitFor(() => expect(card()).toContain("Played with Box of the slipway: capo 3, chords in A"));
+  press("key-history");
+  expect(past()).toEqual([expect.stringMatching(/^F5 March 2026 · capo 3, chords in A/)]);
+  expect(screen.queryByTestId("use-again")).toBeNull();
 });

@@ -9,7 +9,7 @@ import type { SongKeys } from "../useSongKeys";
 import { PastChoices } from "./PastChoices";
 
 export interface DecisionCardProps {
-  keys: Pick<SongKeys, "decided" | "saving" | "undo" | "history" | "remove" | "removed" | "restore">;
+  keys: Pick<SongKeys, "decided" | "saving" | "undo" | "history" | "remove" | "removed" | "restore" | "again">;
   style?: StyleProp<ViewStyle>;
 }
 
@@ -96,7 +96,9 @@ export function DecisionCard({ keys, style }: DecisionCardProps) {
               />
             )}
           </View>
-          {open && <PastChoices history={history} />}
+          {open && (
+            <PastChoices history={history} onAgain={decided.otherVoice === null && !saving ? keys.again : undefined} />
+          )}
         </Card>
       )}
     </View>

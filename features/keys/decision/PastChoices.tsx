@@ -1,11 +1,21 @@
 import { View } from "react-native";
+import { Button } from "@/features/ui/Button";
 import { KeySign } from "@/features/ui/KeySign";
 import { Text } from "@/features/ui/Text";
 import { colors } from "@/features/ui/theme";
+import type { EarlierChoice } from "@/shared/contract/decision";
+import { keySign } from "@/shared/music/keyWords";
+import { glyphs } from "@/shared/music/pitch";
 import type { DecisionHistory, ToldChoice } from "./decisionHistory";
 
-/** What was decided before, newest first, and what holds for other voices. */
-export function PastChoices({ history: { earlier, others } }: { history: DecisionHistory }) {
+export interface PastChoicesProps {
+  history: DecisionHistory;
+  /** takes a choice anew; undefined while that cannot be */
+  onAgain: ((choice: EarlierChoice) => void) | undefined;
+}
+
+/** What was decided before, newest first, what was taken back, and what holds for other voices. */
+export function PastChoices({ history: { earlier, takenBack, others }, onAgain }: PastChoicesProps) {
   return (
     <View testID="key-history-list" style={{ gap: 10, borderTopWidth: 1, borderColor: colors.line, paddingTop: 12 }}>
       {earlier.length === 0 ? (
@@ -13,8 +23,9 @@ export function PastChoices({ history: { earlier, others } }: { history: Decisio
           Nothing was decided before.
         </Text>
       ) : (
-        <Choices title="Before that" choices={earlier} whose={() => null} />
+        <Choices title="Before that" choices={earlier} whose={() => null} onAgain={onAgain} />
       )}
+      {takenBack.length > 0 && <Choices title="Taken back" choices={takenBack} whose={() => null} onAgain={onAgain} />}
       {others.length > 0 && (
         <Choices title="For other voices" choices={others} whose={({ voice }) => voice ?? "Whoever sings"} />
       )}
@@ -26,9 +37,10 @@ interface ChoicesProps {
   title: string;
   choices: readonly ToldChoice[];
   whose: (choice: ToldChoice) => string | null;
+  onAgain?: PastChoicesProps["onAgain"];
 }
 
-function Choices({ title, choices, whose }: ChoicesProps) {
+function Choices({ title, choices, whose, onAgain }: ChoicesProps) {
   return (
     <View style={{ gap: 10 }}>
       <Text variant="label">{title}</Text>
@@ -46,9 +58,24 @@ function Choices({ title, choices, whose }: ChoicesProps) {
                 {choice.reason}
               </Text>
             </View>
+            {choice.again && onAgain && <Again of={choice} onPress={onAgain} />}
           </View>
         ))}
       </View>
     </View>
+  );
+}
+
+function Again({ of: { key, on, again }, onPress }: { of: ToldChoice; onPress: (choice: EarlierChoice) => void }) {
+  const sign = glyphs(keySign(key));
+  return (
+    <Button
+      kind="text"
+      small
+      label="Use again"
+      accessibleName={`Use ${sign} of ${on} again`}
+      onPress={() => again && onPress(again)}
+      testID="use-again"
+    />
   );
 }

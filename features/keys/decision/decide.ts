@@ -62,7 +62,7 @@ export function wayWords({ way }: Pick<Decision, "way">): string | null {
 }
 
 /** A decision made for a chart whose key was changed since no longer says where to play it. */
-export function stillFits(decision: Decision, written: KeyName | null): boolean {
+export function stillFits(decision: Pick<Decision, "tonic" | "shift">, written: KeyName | null): boolean {
   if (written === null) return true;
   const target = (((tonicPitchClass(written.tonic) + decision.shift) % 12) + 12) % 12;
   return tonicPitchClass(decision.tonic) === target;

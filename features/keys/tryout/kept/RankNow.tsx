@@ -4,6 +4,7 @@ import { Heading } from "@/features/ui/Heading";
 import { Notice } from "@/features/ui/Notice";
 import { Text } from "@/features/ui/Text";
 import { colors, mixtures } from "@/features/ui/theme";
+import { sameKey } from "../../sameKey";
 import { moveSentence, type RankMove, whatMoved } from "./rankMoves";
 
 export interface RankNowProps {
@@ -24,7 +25,7 @@ const shown = 5;
 /** The keys as they stand with this try, what moved, why, and the way back. */
 export function RankNow({ moves, shift, sign, why, waiting, undoing, onUndo }: RankNowProps) {
   const best = moves.slice(0, shown);
-  const tried = moves.find(({ row }) => row.shift === shift);
+  const tried = moves.find(({ row }) => sameKey(row.shift, shift));
   const rows = tried && !best.includes(tried) ? [...best, tried] : best;
   return (
     <View role="region" aria-label="The keys as they stand now" style={{ gap: 10 }} testID="rank-now">
@@ -60,8 +61,8 @@ export function RankNow({ moves, shift, sign, why, waiting, undoing, onUndo }: R
               borderBottomWidth: 1,
               borderColor: colors.line,
               borderLeftWidth: 4,
-              borderLeftColor: move.row.shift === shift ? colors.plum : "transparent",
-              backgroundColor: move.row.shift === shift ? mixtures.selected : "transparent",
+              borderLeftColor: sameKey(move.row.shift, shift) ? colors.plum : "transparent",
+              backgroundColor: sameKey(move.row.shift, shift) ? mixtures.selected : "transparent",
             }}
           >
             <Text tone="soft" style={{ width: 24, flexShrink: 0 }}>
@@ -71,7 +72,7 @@ export function RankNow({ moves, shift, sign, why, waiting, undoing, onUndo }: R
               {move.row.sign}
             </Text>
             <Text variant="small" tone="soft" style={{ flexGrow: 1, flexShrink: 1 }}>
-              {move.row.shift === shift ? "tried just now" : changeWords(move)}
+              {sameKey(move.row.shift, shift) ? "tried just now" : changeWords(move)}
             </Text>
             {move.scoreBefore !== move.row.score && (
               <Text variant="small" tone="soft" style={{ flexShrink: 0 }}>{`${move.scoreBefore} →`}</Text>

@@ -72,3 +72,19 @@ test("a sitting ends after three hours, and a key sung again counts by its newes
   const again = { ...tries[1]!, id: "again", effort: 1, sungAt: "2026-11-24T19:55:00.000Z" };
   expect(sittingOf([...tries, again], nowMs).map(({ id }) => id)).toEqual([tries[2]!.id, tries[3]!.id, "again"]);
 });
+
+test("a key that was tried in another octave than it now sits best in is the same key", () => {
+  const low = tries.map((each) => ({ ...each, shift: each.shift - 12 }));
+  render(
+    <SideBySide
+      song={song}
+      tries={low}
+      moves={rankMoves(plain, plain)}
+      decided={sung[2]!.shift + 12}
+      saving={false}
+      onDecide={() => undefined}
+    />,
+  );
+  expect(screen.getAllByRole("columnheader")).toHaveLength(1 + low.length);
+  expect(cellsOf("Your key")[2]).toBe(`${sung[2]!.sign} is my key`);
+});

@@ -10,6 +10,7 @@ import { effortWords } from "../report/effortWords";
 import type { KnownTry } from "../tryQueries";
 import { measureWords, wholeMeasures } from "../report/measureWords";
 import { spellingIn } from "../../keyRows";
+import { sameKey } from "../../sameKey";
 import type { RankMove } from "./rankMoves";
 
 export interface SideBySideProps {
@@ -29,7 +30,8 @@ const headCell = { ...cell, textAlign: "left", fontWeight: 400, width: 108 } as 
 /** The keys tried in this sitting, a column each: what was measured, how it felt, and what that did to the score. */
 export function SideBySide({ song, tries, moves, decided, saving, onDecide }: SideBySideProps) {
   const columns = tries.flatMap((tried) => {
-    const move = moves.find(({ row }) => row.shift === tried.shift);
+    // The tries may have moved the key to a better octave; it is the same key still.
+    const move = moves.find(({ row }) => sameKey(row.shift, tried.shift));
     return move
       ? [
           {
@@ -104,7 +106,7 @@ export function SideBySide({ song, tries, moves, decided, saving, onDecide }: Si
               </th>
               {columns.map(({ tried, move: { row } }) => (
                 <td key={tried.id} style={cell}>
-                  {decided === row.shift ? (
+                  {decided !== null && sameKey(decided, row.shift) ? (
                     <Text variant="small" tone="lagoon" style={{ fontWeight: "600" }}>
                       {`${row.sign} is my key`}
                     </Text>

@@ -8,6 +8,7 @@ import type { Crumb } from "@/features/ui/ScreenHead";
 import { Text } from "@/features/ui/Text";
 import { useLayout } from "@/features/ui/useLayout";
 import type { KeyRow } from "../../keyRows";
+import { sameKey } from "../../sameKey";
 import { ComfortChange } from "./ComfortChange";
 import { rankMoves } from "./rankMoves";
 import { RankNow } from "./RankNow";
@@ -37,8 +38,10 @@ export function TryKept(props: TryKeptProps) {
   const others = own.filter(({ id }) => id !== keptId);
   const before = rowsWith(song, voice, others);
   const now = rowsWith(song, voice, own);
-  const tried = new Set(own.flatMap(({ songId, shift }) => (songId === song.id ? [shift] : [])));
-  const next = (now?.rows ?? []).filter(({ shift, beyond }) => !tried.has(shift) && !beyond).slice(0, nextKeys);
+  const tried = own.filter(({ songId }) => songId === song.id);
+  const next = (now?.rows ?? [])
+    .filter((row) => !row.beyond && !tried.some(({ shift }) => sameKey(shift, row.shift)))
+    .slice(0, nextKeys);
   const [first] = next;
   const goTo = (row: KeyRow) => {
     onKey({ tonic: row.key.tonic, shift: row.shift });

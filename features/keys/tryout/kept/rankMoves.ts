@@ -1,4 +1,5 @@
 import type { KeyRow } from "../../keyRows";
+import { sameKey } from "../../sameKey";
 
 /** A key's place and score before and after evidence. */
 export interface RankMove {
@@ -34,7 +35,7 @@ export function moveSentence({ row, place, placeBefore, scoreBefore }: RankMove)
 
 /** What moved, largest first: the tried key, the new first one where it changed, and how many others. */
 export function whatMoved(moves: readonly RankMove[], shift: number): string[] {
-  const tried = moves.find(({ row }) => row.shift === shift);
+  const tried = moves.find(({ row }) => sameKey(row.shift, shift));
   const first = moves[0];
   const newFirst = first && first.placeBefore !== 1 && first !== tried ? [first] : [];
   const others = moves.filter(

@@ -1,3 +1,4 @@
+import { sameKey } from "../../sameKey";
 import type { KnownTry } from "../tryQueries";
 
 const sittingMs = 3 * 3_600_000;
@@ -8,6 +9,6 @@ export function sittingOf(tries: readonly KnownTry[], nowMs: number): KnownTry[]
   const recent = tries
     .filter(({ sungAt }) => nowMs - Date.parse(sungAt) < sittingMs)
     .sort((a, b) => b.sungAt.localeCompare(a.sungAt));
-  const newest = recent.filter((each, k) => recent.findIndex(({ shift }) => shift === each.shift) === k);
+  const newest = recent.filter((each, k) => recent.findIndex(({ shift }) => sameKey(shift, each.shift)) === k);
   return newest.slice(0, mostKeys).reverse();
 }

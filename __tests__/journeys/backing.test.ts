@@ -1,6 +1,7 @@
 import { buildSync } from "esbuild";
 import { join } from "node:path";
 import type { Browser, Page } from "playwright-core";
+import { chordPitchClasses, parseChord } from "@/shared/music/chord";
 import { demoSongs } from "@/shared/songs/demoSongs";
 import type { BackingPlan, BackingWishes } from "@/shared/songs/backing/backingPlan";
 import { planBacking } from "@/shared/songs/backing/planBacking";
@@ -11,7 +12,14 @@ interface PageOfSound {
     plan: BackingPlan,
     seconds: number,
     sampleRate: number,
-  ): Promise<{ onsets: number[]; peak: number; renderedMs: number }>;
+  ): Promise<{
+    onsets: number[];
+    peak: number;
+    rms: number;
+    quietestClick: number;
+    chromas: { name: string; chroma: number[] }[];
+    renderedMs: number;
+  }>;
   waitForPress(plan: BackingPlan): Promise<void>;
   goRound(plan: BackingPlan, loop: { at: number; end: number }): Promise<Record<string, number | null>>;
   pressed?: { preparedMs: number; startedMs: number; latencyMs: number; soundMs: number };
@@ -50,6 +58,10 @@ function nearest(onsets: readonly number[], at: number): number {
   return onsets.reduce((best, onset) => (Math.abs(onset - at) < Math.abs(best - at) ? onset : best), Infinity);
 }
 
+function decibels(level: number): string {
+  return (20 * Math.log10(level)).toFixed(1);
+}
+
 function planOf(id: string, wishes: BackingWishes): BackingPlan {
   const song = demoSongs.find((each) => each.id === id)!;
   return planBacking(song, { tonic: song.writtenKey.tonic, shift: 0 }, wishes)!;
@@ -60,17 +72,17 @@ test.each([
   ["ferry", "alternating-bass"],
   ["salt", "pluck-and-strum"],
 ] as const)(
-  "a minute of %s by %s sounds when its plan says",
+  "half a minute of %s by %s sounds when its plan says, on the tones of its chords, neither clipped nor too soft",
   async (id, hand) => {
     const plan = planOf(id, { hand, countInBars: 2 });
     const page = await pageOfSound();
-    const { onsets, peak, renderedMs } = await page.evaluate(
-      ([made, rate]) => (window as unknown as PageOfSound).render(made, 60, rate),
+    const { onsets, peak, rms, quietestClick, chromas, renderedMs } = await page.evaluate(
+      ([made, rate]) => (window as unknown as PageOfSound).render(made, 30, rate),
       [plan, sampleRate] as const,
     );
     await page.close();
     const struck = plan.events
-      .filter(({ at, kind }) => at < 59 && kind !== "guide" && kind !== "bass")
+      .filter(({ at, kind }) => at < 29 && kind !== "guide" && kind !== "bass")
       .map(({ at }) => at);
     const late = struck.map((at) => nearest(onsets, at) - at);
     const near = late.filter((seconds) => Math.abs(seconds) < 0.03);
@@ -83,6 +95,17 @@ test.each([
     expect(near.length / struck.length).toBeGreaterThan(0.97);
     expect(off.at(-1)).toBeLessThan(jitterBarMs);
     expect(peak).toBeLessThan(1);
+    const shares = chromas.map(({ name, chroma }) =>
+      chordPitchClasses(parseChord(name)!).reduce((sum, pc) => sum + chroma[pc]!, 0),
+    );
+    say(
+      `  ${plan.metre.name}: level ${decibels(rms)} dB, quietest click ${decibels(quietestClick)} dB at its peak; of the sound of ` +
+        `${shares.length} chords at least ${(100 * Math.min(...shares)).toFixed(0)} % lies on their own tones`,
+    );
+    expect(rms).toBeGreaterThan(0.02);
+    expect(quietestClick).toBeGreaterThan(rms);
+    expect(shares.length).toBeGreaterThan(5);
+    expect(Math.min(...shares)).toBeGreaterThan(0.8);
   },
   60_000,
 );

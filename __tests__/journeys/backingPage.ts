@@ -1,13 +1,21 @@
 import { createBacking } from "@/features/keys/backing/createBacking";
 import { createBackingSounds } from "@/features/keys/backing/backingSounds";
 import type { BackingPlan } from "@/shared/songs/backing/backingPlan";
+import { chromaOf } from "./chroma";
 import { findOnsets } from "./onsets";
 
 interface Rendered {
   onsets: number[];
   peak: number;
+  /** root of the mean square while the song is played, and the peak of the quietest click of the count-in */
+  rms: number;
+  quietestClick: number;
+  /** pitch classes of the first chords as they sound, C first */
+  chromas: { name: string; chroma: number[] }[];
   renderedMs: number;
 }
+
+const mostChords = 12;
 
 interface Round {
   least: number;
@@ -25,9 +33,23 @@ async function render(plan: BackingPlan, seconds: number, sampleRate: number): P
   const begun = performance.now();
   const pcm = (await context.startRendering()).getChannelData(0);
   const renderedMs = performance.now() - begun;
+  const cut = (fromS: number, endS: number) =>
+    pcm.subarray(Math.round(fromS * sampleRate), Math.round(endS * sampleRate));
+  const peakOf = (part: Float32Array) => part.reduce((most, x) => Math.max(most, Math.abs(x)), 0);
+  const clicks = plan.events.filter(({ kind, at }) => kind === "click" && at < plan.countInS);
+  const played = cut(plan.countInS, Math.min(seconds, plan.durationS));
+  const chords = plan.chords.flatMap(({ at, name }, k) => {
+    const end = plan.chords[k + 1]?.at ?? plan.durationS;
+    return name !== null && end < seconds && end - at > 0.5
+      ? [{ name, chroma: chromaOf(cut(at, end), sampleRate) }]
+      : [];
+  });
   return {
     onsets: findOnsets(pcm, sampleRate),
-    peak: pcm.reduce((most, x) => Math.max(most, Math.abs(x)), 0),
+    peak: peakOf(pcm),
+    rms: Math.sqrt(played.reduce((sum, x) => sum + x * x, 0) / played.length),
+    quietestClick: Math.min(...clicks.map(({ at }) => peakOf(cut(at, at + 0.05)))),
+    chromas: chords.slice(0, mostChords),
     renderedMs,
   };
 }

@@ -4,7 +4,7 @@ import { pluckString, type StringSound } from "./pluckedString";
 
 const guitar: StringSound = { decayS: 2.6, bright: 0.55, lengthS: 3 };
 const bass: StringSound = { decayS: 2.2, bright: 0.12, lengthS: 2.4 };
-const gains = { string: 0.17, pluck: 0.3, bass: 0.34, click: 0.3, guide: 0.2 } as const;
+const gains = { string: 0.1, pluck: 0.18, bass: 0.2, click: 0.42, guide: 0.2 } as const;
 /** From string to string of a stroke; an upstroke is quicker and lighter. */
 const strumS = { down: 0.011, up: 0.007 } as const;
 const dampS = 0.05;

@@ -40,3 +40,24 @@ test("it starts at once, dies away, ends in silence, and never leaves full scale
 test("the same note sounds the same each time", () => {
   expect(pluckString(60, sampleRate, sound)).toEqual(pluckString(60, sampleRate, sound));
 });
+
+/** Energy at one frequency. */
+function energyAt(pcm: Float32Array, hz: number): number {
+  const step = (2 * Math.PI * hz) / sampleRate;
+  const sums = pcm.reduce(([re, im], x, k) => [re! + x * Math.cos(step * k), im! + x * Math.sin(step * k)], [0, 0]);
+  return sums[0]! ** 2 + sums[1]! ** 2;
+}
+
+test.each([
+  ["bass", 0.12, [28, 31, 35, 40, 43, 47, 48, 50]],
+  ["guitar", 0.55, [45, 47, 48, 52, 56, 63, 68]],
+] as const)(
+  "every %s string is heard as its own note: no partial is stronger than its fundamental",
+  (_, bright, notes) => {
+    for (const midi of notes) {
+      const pcm = pluckString(midi, sampleRate, { decayS: 2.4, bright, lengthS: 0.6 });
+      const [first = 0, ...above] = [1, 2, 3, 4].map((k) => energyAt(pcm, k * midiToHz(midi)));
+      expect(Math.max(...above)).toBeLessThan(1.5 * first);
+    }
+  },
+);

@@ -11,7 +11,7 @@ export interface StringSound {
 }
 
 /**
- * The sound of one plucked string: noise of one period that runs round a damped loop, tuned by an all-pass.
+ * The sound of one plucked string: one period that runs round a damped loop, tuned by an all-pass.
  *
  * @see K. Karplus, A. Strong, "Digital Synthesis of Plucked-String and Drum Timbres", Computer Music Journal 7(2), 1983;
  *   D. Jaffe, J. Smith, "Extensions of the Karplus-Strong Plucked-String Algorithm", ibid.
@@ -49,18 +49,23 @@ export function pluckString(midi: number, sampleRate: number, sound: StringSound
   return out;
 }
 
-/** One period of noise without a constant part, softened by how it is plucked; the same for the same note each time. */
+/** Where it is plucked, as a part of its length: every fifth partial is missing. */
+const pluckedAt = 1 / 5;
+const mostPartials = 60;
+
+/**
+ * One period of a plucked string: partials that fall evenly, faster where it is plucked softly, in phases scattered by
+ * the note. Noise would do for a start, but its lowest partial may be missing by chance, and then the note is not heard.
+ */
 function pluck(length: number, bright: number, seed: number): Float32Array {
-  const noise = new Float32Array(length);
+  const period = new Float32Array(length);
   let state = (Math.round(seed * 100) * 2654435761) >>> 0 || 1;
-  let soft = 0;
-  for (let i = 0; i < length; i += 1) {
+  const fall = 0.5 + (1 - bright);
+  for (let k = 1; k <= Math.min(mostPartials, length / 2 - 1); k += 1) {
     state = (Math.imul(state, 1664525) + 1013904223) >>> 0;
-    soft += (0.15 + 0.85 * bright) * (state / 2 ** 31 - 1 - soft);
-    noise[i] = soft;
+    const phase = (2 * Math.PI * state) / 2 ** 32;
+    const amplitude = Math.abs(Math.sin(Math.PI * k * pluckedAt)) * k ** -fall;
+    for (let i = 0; i < length; i += 1) period[i]! += amplitude * Math.sin((2 * Math.PI * k * i) / length + phase);
   }
-  const mean = noise.reduce((sum, x) => sum + x, 0) / length;
-  // Plucked at a fifth of its length: every fifth partial is weak.
-  const offset = Math.max(1, Math.round(length / 5));
-  return noise.map((x, i) => x - mean - 0.7 * (noise[(i + length - offset) % length]! - mean));
+  return period;
 }

@@ -1,5 +1,5 @@
 import { presets } from "@/shared/instruments/presets";
-import type { WaysQuestion } from "@/shared/ways/findWays";
+import type { WaysQuestion } from "@/shared/ways/wayCandidates";
 import type { WayAnswer } from "./waySearch";
 
 const question = (tonic: string): WaysQuestion => ({

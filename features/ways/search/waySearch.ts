@@ -1,4 +1,4 @@
-import type { WaysQuestion } from "@/shared/ways/findWays";
+import type { WaysQuestion } from "@/shared/ways/wayCandidates";
 import type { Way } from "@/shared/ways/way";
 
 /** What the worker says: that it listens, and one answer for each question. */

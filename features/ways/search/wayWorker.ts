@@ -1,4 +1,5 @@
-import { findWays, type WaysQuestion } from "@/shared/ways/findWays";
+import { findWays } from "@/shared/ways/findWays";
+import type { WaysQuestion } from "@/shared/ways/wayCandidates";
 import type { WayAnswer } from "./waySearch";
 
 interface WorkerScope {

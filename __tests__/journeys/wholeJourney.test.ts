@@ -81,7 +81,8 @@ async function chooseKeyAndWay(page: Page, viewport: Viewport): Promise<{ key: s
   }
   await page.waitForURL("**/ways?**");
   const key = new URL(page.url()).searchParams.get("key") ?? "";
-  await page.getByTestId("instrument").selectOption("ukulele");
+  await page.getByTestId("instrument").click();
+  await page.getByTestId("choose-ukulele").click();
   const cards = page.getByRole("radio");
   await cards.first().waitFor();
   expect(await cards.count()).toBeGreaterThan(1);

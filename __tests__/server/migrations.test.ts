@@ -14,6 +14,7 @@ const names = [
   "SongRevisions1769904000000",
   "SongVersions1772323200000",
   "KeysPerVoice1775001600000",
+  "InstrumentPhotos1778000000000",
   "MailAndJobs1782000000000",
 ];
 const applied = () => database.query("SELECT name FROM migrations ORDER BY id");

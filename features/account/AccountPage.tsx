@@ -7,6 +7,7 @@ import { Heading } from "@/features/ui/Heading";
 import { LinkButton } from "@/features/ui/LinkButton";
 import { Skeleton } from "@/features/ui/Skeleton";
 import { Text } from "@/features/ui/Text";
+import { UnitChoice } from "@/features/ui/UnitChoice";
 import { useLayout } from "@/features/ui/useLayout";
 import { MoveInNotice } from "./MoveInNotice";
 import { SignedInCard } from "./SignedInCard";
@@ -60,6 +61,13 @@ export function AccountPage() {
           <View style={{ alignSelf: "flex-start" }}>
             <LinkButton kind="secondary" small label="Your instruments" href="/instruments" testID="to-instruments" />
           </View>
+        </Card>
+        <Card style={{ gap: 12 }}>
+          <Heading level={2}>Units</Heading>
+          <UnitChoice />
+          <Text variant="small" tone="soft">
+            For scales, strings and their tension. The choice is kept on this device.
+          </Text>
         </Card>
         <ThemeChoice />
       </View>

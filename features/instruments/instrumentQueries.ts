@@ -23,3 +23,15 @@ export function useSaveInstruments() {
     onSettled: () => client.invalidateQueries({ queryKey: ["instruments"] }),
   });
 }
+
+/** Takes an instrument of one's own away. */
+export function useRemoveInstrument() {
+  const client = useQueryClient();
+  return useMutation({
+    mutationFn: (id: string) => shelf.remove("instruments", id),
+    onSuccess: (_, id) => {
+      client.setQueryData(instrumentQueries.all().queryKey, (known) => (known ?? []).filter((each) => each.id !== id));
+    },
+    onSettled: () => client.invalidateQueries({ queryKey: ["instruments"] }),
+  });
+}

@@ -12,20 +12,34 @@ export interface OfferedInstrument {
   own: OwnInstrument | null;
 }
 
-/** Own instruments as the engine wants them; the id of the preset stands for the one taken from it. */
-export function instrumentOf(own: OwnInstrument): Instrument {
-  const { presetId, favourite, fretMap, ...rest } = own;
-  return { ...rest, id: presetId ?? own.id, ...(fretMap === undefined ? null : { fretMap }) };
+/** An own instrument as the engine wants it; the id of the preset stands for the one taken from it. */
+export function instrumentOf(own: OwnInstrument, id = own.presetId ?? own.id): Instrument {
+  const { presetId: _preset, favourite: _favourite, photo: _photo, fretMap, ...rest } = own;
+  return { ...rest, id, ...(fretMap === undefined ? null : { fretMap }) };
 }
 
-/** All presets, each in the state that its owner gave it, and behind them what belongs to no preset. */
+/** The own instrument that stands in a preset's place: the favourite of several. */
+function inPlaceOf(owned: readonly OwnInstrument[], presetId: string): OwnInstrument | null {
+  const taken = owned.filter((each) => each.presetId === presetId);
+  return taken.find(({ favourite }) => favourite) ?? taken[0] ?? null;
+}
+
+/** All presets, each in the state that its owner gave it, and behind them every other instrument of one's own. */
 export function offeredInstruments(owned: readonly OwnInstrument[]): OfferedInstrument[] {
   const fromPresets = presets.map((preset) => {
-    const own = owned.find((each) => each.presetId === preset.id) ?? null;
+    const own = inPlaceOf(owned, preset.id);
     return { instrument: own ? instrumentOf(own) : preset, own };
   });
-  const others = owned.filter((own) => !presets.some((preset) => preset.id === own.presetId));
-  return [...fromPresets, ...others.map((own) => ({ instrument: instrumentOf(own), own }))];
+  const others = owned.filter((own) => !fromPresets.some((each) => each.own === own));
+  return [...fromPresets, ...others.map((own) => ({ instrument: instrumentOf(own, own.id), own }))];
+}
+
+/** What is one's own, the favourite first; a preset only turned or marked counts too. */
+export function ownFirst(owned: readonly OwnInstrument[]): { mine: OfferedInstrument[]; others: OfferedInstrument[] } {
+  const offered = offeredInstruments(owned);
+  const favourite = ({ own }: OfferedInstrument) => (own?.favourite ? 0 : 1);
+  const mine = offered.filter(({ own }) => own !== null).sort((a, b) => favourite(a) - favourite(b));
+  return { mine, others: offered.filter(({ own }) => own === null) };
 }
 
 /** The instrument of an id; the favourite, or else the first offered, where the id is unknown or null. */
@@ -42,10 +56,10 @@ export function chosenInstrument(owned: readonly OwnInstrument[], id: string | n
 
 /** What has to be kept so that one instrument is the favourite and no other is. */
 export function makeFavourite(owned: readonly OwnInstrument[], id: string, newId: () => string): OwnInstrument[] {
-  const before = owned
-    .filter((own) => own.favourite && instrumentOf(own).id !== id)
-    .map((own) => ({ ...own, favourite: false }));
   const own = ownedAs(owned, id, newId);
+  const before = owned
+    .filter((each) => each.favourite && each.id !== own.id)
+    .map((each) => ({ ...each, favourite: false }));
   return own.favourite && owned.includes(own) ? before : [...before, { ...own, favourite: true }];
 }
 
@@ -61,7 +75,7 @@ export function turnHand(
 
 /** One's own of that id; a copy of the preset where there is none yet. */
 export function ownedAs(owned: readonly OwnInstrument[], id: string, newId: () => string): OwnInstrument {
-  const own = owned.find((each) => instrumentOf(each).id === id);
+  const own = offeredInstruments(owned).find(({ instrument }) => instrument.id === id)?.own;
   if (own) return own;
   const { fretMap, ...preset } = chosenInstrument(owned, id);
   return {

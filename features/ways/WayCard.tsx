@@ -48,6 +48,18 @@ export function WayCard({ way, instrument, chosen, radio, onChoose }: WayCardPro
         <TextLink href={tunePath(instrument.id, way.retune, way.capo)}>Tune for this, string by string</TextLink>
       )}
       {way.cautions.length > 0 && <Cautions texts={way.cautions} />}
+      {way.retune !== 0 && (
+        <TextLink
+          href={{
+            pathname: "/instruments/retune",
+            params: { instrument: instrument.id, shift: String(way.retune) },
+          }}
+          testID="to-retune"
+          style={{ marginTop: 6 }}
+        >
+          Each string, and the order to tune in
+        </TextLink>
+      )}
     </>
   );
 }

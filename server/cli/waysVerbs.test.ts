@@ -61,9 +61,31 @@ test("instruments and tension print a line each, strings low to high", async () 
     frets: 20,
   });
   // D'Addario's chart 13934: a 10-46 set, nickel-plated there, so the plain strings are compared.
-  const lines = await linesOf(tensionVerb, words("--instrument guitar --shift -2 --gauges .046,.036,.026,.017,.013,.010"));
+  const lines = await linesOf(
+    tensionVerb,
+    words("--instrument guitar --shift -2 --gauges .046,.036,.026,.017,.013,.010"),
+  );
   expect(lines).toHaveLength(6);
   expect(lines[5]).toEqual({ string: "E4", gauge: 0.01, beforeLb: 16.2, afterLb: 12.86, verdict: "fine" });
+});
+
+test("tension judges from the note a set was made for, and says by null what it does not know", async () => {
+  const down = await linesOf(tensionVerb, words("--instrument guitar-whole-down --shift -1"));
+  expect(down.map((line) => "verdict" in line && line.verdict)).toEqual(Array.from({ length: 6 }, () => "slack"));
+  const [uke] = await linesOf(tensionVerb, words("--instrument ukulele --shift +2"));
+  expect(uke).toEqual({ string: "G4", gauge: null, beforeLb: null, afterLb: null, verdict: "unsafe" });
+  // D'Addario's chart 13934, clear nylon .028: 2.216e-5 lb/in.
+  const nylon = await linesOf(tensionVerb, words("--instrument ukulele --shift 0 --gauges .024,.032,.034,.028"));
+  expect(nylon[3]).toMatchObject({ string: "A4", gauge: 0.028, beforeLb: 9.99 });
+  const aea = await linesOf(tensionVerb, words("--instrument box-aea --shift 0 --gauges .042,.032,.024"));
+  for (const line of aea) expect(line).toMatchObject({ beforeLb: expect.any(Number), verdict: "fine" });
+});
+
+test("instruments lists every preset with the agreed fields, the banjo's short string among the others", async () => {
+  const lines = await linesOf(instrumentsVerb, []);
+  expect(lines.length).toBeGreaterThanOrEqual(30);
+  for (const line of lines) expect(Object.keys(line)).toEqual(["id", "name", "strings", "scaleMm", "frets"]);
+  expect(lines).toContainEqual(expect.objectContaining({ id: "banjo", strings: ["G4", "D3", "G3", "B3", "D4"] }));
 });
 
 const cases: [string, Verb, string][] = [
@@ -80,6 +102,11 @@ const cases: [string, Verb, string][] = [
   ["frets below zero", shapesVerb, "C --tuning A3,D4,F#4 --frets -1"],
   ["a scale of words", shapesVerb, "C --tuning A3,D4,F#4 --scale long"],
   ["an unknown instrument", tensionVerb, "--instrument lute --shift 1"],
+  ["an argument for a list", instrumentsVerb, "all"],
+  ["no shift", tensionVerb, "--instrument guitar"],
+  ["a shift of words", tensionVerb, "--instrument guitar --shift down"],
+  ["a shift out of all reach", tensionVerb, "--instrument guitar --shift 40"],
+  ["gauges of words", tensionVerb, "--instrument box-gdg --shift 1 --gauges thick,thin,thin"],
   ["half a semitone", tensionVerb, "--instrument guitar --shift 0.5"],
   ["too few gauges", tensionVerb, "--instrument guitar --shift 1 --gauges .012,.016"],
   ["no file", waysVerb, "--to C --instrument guitar"],

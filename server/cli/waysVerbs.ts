@@ -143,14 +143,22 @@ function withGauges(instrument: Instrument, text: string): Instrument {
   if (gauges.length !== instrument.strings.length)
     throw new BadInput(`--gauges wants ${instrument.strings.length} values, low to high; there are ${gauges.length}.`);
   const wound = instrument.strings.find(({ material }) => isWound(material))?.material ?? "phosphor-bronze";
+  const steel = instrument.strings.some(({ material }) => material === "plain-steel" || isWound(material));
   const strings = instrument.strings.map((string, k) => {
-    return { ...string, gaugeIn: gauges[k]!, material: materialOf(string, gauges[k]!, wound) };
+    return { ...string, gaugeIn: gauges[k]!, material: materialOf(string, gauges[k]!, wound, steel) };
   });
   return { ...instrument, strings };
 }
 
-function materialOf(string: InstrumentString, gaugeIn: number, wound: StringMaterial): StringMaterial {
-  const steel = string.material === "plain-steel" || isWound(string.material);
+/** A string of unknown material among steel ones is taken to be steel. */
+function materialOf(
+  string: InstrumentString,
+  gaugeIn: number,
+  wound: StringMaterial,
+  amongSteel: boolean,
+): StringMaterial {
+  const steel =
+    string.material === "plain-steel" || isWound(string.material) || (string.material === "unknown" && amongSteel);
   if (!steel) return string.material;
   return gaugeIn <= thickestPlainIn ? "plain-steel" : isWound(string.material) ? string.material : wound;
 }

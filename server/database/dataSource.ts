@@ -8,6 +8,7 @@ import { SongEntity } from "../songs/song.entity";
 import { TakeEntity } from "../voices/take.entity";
 import { VoiceEntity } from "../voices/voice.entity";
 import { FirstTables1764547200000 } from "./migrations/FirstTables1764547200000";
+import { InstrumentPhotos1778000000000 } from "./migrations/InstrumentPhotos1778000000000";
 import { KeysPerVoice1775001600000 } from "./migrations/KeysPerVoice1775001600000";
 import { KindOfTake1767225600000 } from "./migrations/KindOfTake1767225600000";
 import { MailAndJobs1782000000000 } from "./migrations/MailAndJobs1782000000000";
@@ -58,6 +59,7 @@ export function createMigrationSource(url: string): DataSource {
       SongRevisions1769904000000,
       SongVersions1772323200000,
       KeysPerVoice1775001600000,
+      InstrumentPhotos1778000000000,
       MailAndJobs1782000000000,
     ],
     migrationsTransactionMode: "all",

@@ -1,4 +1,4 @@
-/** The addresses that the web client knows; every other page answers 404. ":id" stands for the id of a song. */
+/** The addresses that the web client knows; every other page answers 404. ":id" stands for an id. */
 export const clientRoutes = [
   "/",
   "/voice",
@@ -21,6 +21,9 @@ export const clientRoutes = [
   "/songs/:id/try",
   "/instruments",
   "/instruments/tune",
+  "/instruments/new",
+  "/instruments/retune",
+  "/instruments/:id",
   "/account",
   "/account/sign-in",
   "/account/sign-up",

@@ -30,4 +30,7 @@ export class InstrumentEntity extends OwnedEntity implements OwnInstrument {
 
   @Column({ type: "boolean" })
   favourite!: boolean;
+
+  @Column({ type: "text", nullable: true, transformer: absentAsNull })
+  photo?: string;
 }

@@ -1,8 +1,8 @@
-import { boxPresets } from "./boxPresets";
-import { banjoPresets, dulcimerPresets, mandolinPresets } from "./folkPresets";
-import { guitarPresets } from "./guitarPresets";
+import { boxPresets } from "./presets/boxPresets";
+import { banjoPresets, dulcimerPresets, mandolinPresets } from "./presets/folkPresets";
+import { guitarPresets } from "./presets/guitarPresets";
 import type { Instrument } from "./instrument";
-import { ukulelePresets } from "./ukulelePresets";
+import { ukulelePresets } from "./presets/ukulelePresets";
 
 /** Presets that belong together in a list. */
 export interface PresetGroup {

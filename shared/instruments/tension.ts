@@ -46,6 +46,14 @@ export interface TensionChange {
   beforeLb: number | null;
   afterLb: number | null;
   verdict: RetuneVerdict;
+  /** semitones it is shifted by */
+  semitones: number;
+  /** tension afterwards as a share of the one at the note its set was made for */
+  ofPacket: number;
+  /** afterwards, as a share of what the weakest wire of its gauge bears; null but for plain steel of a known gauge */
+  load: number | null;
+  /** how many strings like this stand side by side */
+  strings: number;
 }
 
 /**
@@ -144,24 +152,57 @@ export function abovePacket({ note, madeFor = note }: Pick<InstrumentString, "no
  * Tensions of all strings before and after a retune.
  *
  * @param instrument in its present tuning
- * @param semitones shift of all strings alike, whole, negative for down
- * @returns one entry a string, in playing order
- * @throws RangeError if a string has no readable note or semitones is not whole
+ * @param shifts whole semitones, negative for down: one for all strings alike, or one for each
+ * @returns one entry a string, in playing order; tensions are of one string of a course
+ * @throws RangeError if a string has no readable note, or a shift is missing or not whole
  */
-export function tensionChanges(instrument: Instrument, semitones: number): TensionChange[] {
-  if (!Number.isInteger(semitones)) throw new RangeError("semitones must be whole");
-  return instrument.strings.map((string) => {
+export function tensionChanges(instrument: Instrument, shifts: number | readonly number[]): TensionChange[] {
+  return instrument.strings.map((string, k) => {
+    const semitones = typeof shifts === "number" ? shifts : shifts[k];
+    if (!Number.isInteger(semitones)) throw new RangeError("semitones must be whole");
+    const by = semitones!;
     const midi = stringMidi(string);
     const spelling = string.note.includes("b") ? "flats" : "sharps";
     return {
       string: string.note,
-      to: semitones === 0 ? string.note : noteName(midi + semitones, spelling),
+      to: by === 0 ? string.note : noteName(midi + by, spelling),
       gaugeIn: string.gaugeIn,
       beforeLb: tensionAt(string, instrument.scaleMm, midi),
-      afterLb: tensionAt(string, instrument.scaleMm, midi + semitones),
-      verdict: retuneVerdict(string, instrument.scaleMm, semitones),
+      afterLb: tensionAt(string, instrument.scaleMm, midi + by),
+      verdict: retuneVerdict(string, instrument.scaleMm, by),
+      semitones: by,
+      ofPacket: tensionRatio(abovePacket(string) + by),
+      load: plainLoad(string, instrument.scaleMm, by),
+      strings: string.inCourse ?? 1,
     };
   });
+}
+
+/** Pull on the neck before and after, as far as it is known. */
+export interface TensionTotal {
+  beforeLb: number;
+  afterLb: number;
+  /** strings whose gauge or material is not known are left out; how many */
+  unknown: number;
+}
+
+/**
+ * Total tension of all strings, every string of a course counted.
+ *
+ * @param changes of one instrument
+ * @returns pounds-force before and after
+ * @example totalTension([]) // => { beforeLb: 0, afterLb: 0, unknown: 0 }
+ */
+export function totalTension(changes: readonly TensionChange[]): TensionTotal {
+  const total = { beforeLb: 0, afterLb: 0, unknown: 0 };
+  for (const { beforeLb, afterLb, strings } of changes) {
+    if (beforeLb === null || afterLb === null) total.unknown += strings;
+    else {
+      total.beforeLb += beforeLb * strings;
+      total.afterLb += afterLb * strings;
+    }
+  }
+  return total;
 }
 
 /**

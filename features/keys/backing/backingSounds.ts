@@ -1,6 +1,6 @@
 import type { BackingEvent, BackingPlan } from "@/shared/songs/backing/backingPlan";
 import { midiToHz } from "@/shared/music/pitch";
-import { pluckString, type StringSound } from "./pluckedString";
+import { pluckString, type StringSound } from "@/shared/music/pluckedString";
 
 const guitar: StringSound = { decayS: 2.6, bright: 0.55, lengthS: 3 };
 const bass: StringSound = { decayS: 2.2, bright: 0.12, lengthS: 2.4 };

@@ -1,5 +1,5 @@
 import { useCallback, useEffect, useReducer } from "react";
-import { deviceDraft } from "../deviceDraft";
+import { deviceDraft } from "@/features/api/deviceDraft";
 import { changeTo, redo, undo, type EditHistory } from "./editHistory";
 import { packSteps, unpackSteps, type KeptSteps } from "./keptSteps";
 import type { SongDraft } from "./songDraft";

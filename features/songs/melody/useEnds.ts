@@ -3,7 +3,7 @@ import type { Song } from "@/shared/contract/song";
 import { tonicPitchClass } from "@/shared/music/keyName";
 import { glyphs, noteName, pitchClass } from "@/shared/music/pitch";
 import { tuneSpan } from "@/shared/songs/tuneSpan";
-import { deviceDraft } from "../deviceDraft";
+import { deviceDraft } from "@/features/api/deviceDraft";
 import type { SpanTexts } from "./SpanByHand";
 import { spellingOfHome } from "./spellingOfHome";
 

@@ -4,7 +4,7 @@ import type { TakeReport } from "@/shared/voice/takeReport";
 import type { MelodyNote } from "@/shared/songs/melody";
 import { insertNote, replaceNotes } from "@/shared/songs/noteEdits";
 import { proposeHome, sungMelody, UNTIMED_TEMPO } from "@/shared/songs/sungMelody";
-import { deviceDraft } from "../deviceDraft";
+import { deviceDraft } from "@/features/api/deviceDraft";
 import { keptTune, keptWords, type KeptTune } from "./keptTune";
 import { beginHistory, noteHistory, stepsToKeep, type Moment, type NoteHistory } from "./noteHistory";
 

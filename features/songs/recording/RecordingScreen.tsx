@@ -12,7 +12,7 @@ import type { Song } from "@/shared/contract/song";
 import { glyphs } from "@/shared/music/pitch";
 import { formParts, tempoOfTaps } from "@/shared/songs/formSketch";
 import { reconcileKeys } from "@/shared/songs/reconcileKeys";
-import { deviceDraft } from "../deviceDraft";
+import { deviceDraft } from "@/features/api/deviceDraft";
 import { useSaveSong } from "../songQueries";
 import { AnswerStep, NoAnswer } from "./AnswerStep";
 import { BeatStep } from "./BeatStep";

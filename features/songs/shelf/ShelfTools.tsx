@@ -4,7 +4,7 @@ import { Button } from "@/features/ui/Button";
 import { songPages } from "@/features/api/songPages";
 import type { SongListing } from "@/shared/contract/songListing";
 import { ExportChoices } from "../exchange/ExportChoices";
-import { ShelfDialog } from "./actions/ShelfDialog";
+import { Dialog } from "@/features/ui/Dialog";
 import type { ShelfView } from "./shelfView";
 
 export interface ShelfToolsProps {
@@ -40,9 +40,9 @@ export function ShelfTools({ view, songs, total, chosen, onChosen }: ShelfToolsP
         testID="export-songs"
       />
       {exporting && (
-        <ShelfDialog title={`Export ${what}`} onClose={() => setExporting(false)} testID="export-dialog">
+        <Dialog title={`Export ${what}`} onClose={() => setExporting(false)} testID="export-dialog">
           <ExportChoices count={count} ids={() => (some ? [...chosen] : everyId(view, songs, total))} />
-        </ShelfDialog>
+        </Dialog>
       )}
     </View>
   );

@@ -4,7 +4,7 @@ import { Button } from "@/features/ui/Button";
 import type { IconName } from "@/features/ui/Icon";
 import { RemoveSong } from "../../RemoveSong";
 import { ExportChoices } from "../../exchange/ExportChoices";
-import { ShelfDialog } from "./ShelfDialog";
+import { Dialog } from "@/features/ui/Dialog";
 import { TagEditor } from "./TagEditor";
 import type { ActedOn, SongActions } from "./useSongActions";
 
@@ -34,18 +34,18 @@ export function SongMenu({ song, actions, onClose }: SongMenuProps) {
   );
   if (part === "tags")
     return (
-      <ShelfDialog key="tags" title={`Tags of “${song.title}”`} onClose={onClose} testID="tag-dialog">
+      <Dialog key="tags" title={`Tags of “${song.title}”`} onClose={onClose} testID="tag-dialog">
         <TagEditor id={song.id} tags={song.tags} />
-      </ShelfDialog>
+      </Dialog>
     );
   if (part === "export")
     return (
-      <ShelfDialog key="export" title={`Export “${song.title}”`} onClose={onClose} testID="export-dialog">
+      <Dialog key="export" title={`Export “${song.title}”`} onClose={onClose} testID="export-dialog">
         <ExportChoices count={1} ids={() => [song.id]} />
-      </ShelfDialog>
+      </Dialog>
     );
   return (
-    <ShelfDialog key="menu" title={song.title} onClose={onClose} testID="song-menu">
+    <Dialog key="menu" title={song.title} onClose={onClose} testID="song-menu">
       <View style={{ alignItems: "flex-start" }}>
         {item("Tags", "bookmark", () => setPart("tags"), "menu-tags")}
         {item("Played today", "check", and(actions.played), "menu-played")}
@@ -61,6 +61,6 @@ export function SongMenu({ song, actions, onClose }: SongMenuProps) {
           error={actions.removal.error}
         />
       </View>
-    </ShelfDialog>
+    </Dialog>
   );
 }

@@ -5,7 +5,7 @@ import { Text } from "@/features/ui/Text";
 import type { Song } from "@/shared/contract/song";
 import { ExportChoices } from "../../exchange/ExportChoices";
 import { DoneBar } from "./DoneBar";
-import { ShelfDialog } from "./ShelfDialog";
+import { Dialog } from "@/features/ui/Dialog";
 import { TagEditor } from "./TagEditor";
 import { useSongActions } from "./useSongActions";
 
@@ -60,14 +60,14 @@ export function SongTools({ song }: { song: Song }) {
         )}
       </View>
       {open === "tags" && (
-        <ShelfDialog title={`Tags of “${song.title}”`} onClose={() => setOpen(null)} testID="tag-dialog">
+        <Dialog title={`Tags of “${song.title}”`} onClose={() => setOpen(null)} testID="tag-dialog">
           <TagEditor id={song.id} tags={song.tags} />
-        </ShelfDialog>
+        </Dialog>
       )}
       {open === "export" && (
-        <ShelfDialog title={`Export “${song.title}”`} onClose={() => setOpen(null)} testID="export-dialog">
+        <Dialog title={`Export “${song.title}”`} onClose={() => setOpen(null)} testID="export-dialog">
           <ExportChoices count={1} ids={() => [song.id]} />
-        </ShelfDialog>
+        </Dialog>
       )}
       <DoneBar actions={actions} />
     </View>

@@ -1,4 +1,4 @@
-import { midiToHz } from "@/shared/music/pitch";
+import { midiToHz } from "./pitch";
 
 /** How a string sounds. */
 export interface StringSound {
@@ -13,6 +13,10 @@ export interface StringSound {
 /**
  * The sound of one plucked string: one period that runs round a damped loop, tuned by an all-pass.
  *
+ * @param midi note, fractional allowed
+ * @param sampleRate samples a second
+ * @param sound how it is plucked and how long it sounds
+ * @returns samples from -1 to 1; the same for the same note each time
  * @see K. Karplus, A. Strong, "Digital Synthesis of Plucked-String and Drum Timbres", Computer Music Journal 7(2), 1983;
  *   D. Jaffe, J. Smith, "Extensions of the Karplus-Strong Plucked-String Algorithm", ibid.
  */

@@ -1,4 +1,4 @@
-import type { InstrumentString, StringMaterial } from "./instrument";
+import type { InstrumentString, StringMaterial } from "../instrument";
 
 /** Note, gauge in inches (null where nobody prints one), material and, where it is another, the note it was made for. */
 export type Strung = readonly [note: string, gaugeIn: number | null, material: StringMaterial, madeFor?: string];

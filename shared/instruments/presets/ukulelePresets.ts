@@ -1,4 +1,4 @@
-import type { Instrument } from "./instrument";
+import type { Instrument } from "../instrument";
 import { inchesToMm, strung } from "./stringing";
 
 const nylon = (...notes: readonly string[]) => strung(...notes.map((note) => [note, null, "nylon"] as const));

@@ -1,11 +1,11 @@
 import { useEffect, useRef, type ReactNode } from "react";
 import { View } from "react-native";
-import { Heading } from "@/features/ui/Heading";
-import { IconButton } from "@/features/ui/IconButton";
-import { colors, sizes } from "@/features/ui/theme";
-import { useLayout } from "@/features/ui/useLayout";
+import { Heading } from "./Heading";
+import { IconButton } from "./IconButton";
+import { colors, sizes } from "./theme";
+import { useLayout } from "./useLayout";
 
-export interface ShelfDialogProps {
+export interface DialogProps {
   title: string;
   onClose: () => void;
   children: ReactNode;
@@ -13,7 +13,7 @@ export interface ShelfDialogProps {
 }
 
 /** A sheet over the page: at the foot of the phone, in the middle of wider screens. Escape and a press beside it close it. */
-export function ShelfDialog({ title, onClose, children, testID }: ShelfDialogProps) {
+export function Dialog({ title, onClose, children, testID }: DialogProps) {
   const node = useRef<HTMLDialogElement>(null);
   const phone = useLayout() === "phone";
   useEffect(() => {

@@ -1,4 +1,4 @@
-import { midiToHz } from "@/shared/music/pitch";
+import { midiToHz } from "./pitch";
 import { pluckString } from "./pluckedString";
 
 const sampleRate = 48_000;

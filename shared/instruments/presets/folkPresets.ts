@@ -1,5 +1,5 @@
-import { diatonicFrets } from "./frets";
-import type { Instrument } from "./instrument";
+import { diatonicFrets } from "../frets";
+import type { Instrument } from "../instrument";
 import { inchesToMm, inPairs, strung } from "./stringing";
 
 const dulcimerFrets = diatonicFrets(16, true);

@@ -1,4 +1,4 @@
-import type { Instrument } from "./instrument";
+import type { Instrument } from "../instrument";
 import { inchesToMm, strung } from "./stringing";
 
 const box = { scaleMm: inchesToMm(25), frets: 20, capoTo: 9, leftHanded: false };

@@ -1,4 +1,4 @@
-import type { Instrument, InstrumentString } from "./instrument";
+import type { Instrument, InstrumentString } from "../instrument";
 import { inchesToMm, strung } from "./stringing";
 
 type SixNotes = readonly [string, string, string, string, string, string];

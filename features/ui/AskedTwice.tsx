@@ -1,0 +1,60 @@
+import { useEffect, useRef, useState } from "react";
+import { View } from "react-native";
+import { Button } from "./Button";
+import { Notice } from "./Notice";
+import { Text } from "./Text";
+
+export interface AskedTwiceProps {
+  /** on the button that asks: "Delete the song" */
+  label: string;
+  /** what is asked: "Delete “Slack Water”?" */
+  question: string;
+  /** what goes */
+  text: string;
+  /** before the reason why it did not work: "It is not deleted." */
+  failed: string;
+  onRemove: () => void;
+  busy: boolean;
+  error: Error | null;
+  /** of the button; the others follow: "remove-song" */
+  testID: string;
+}
+
+/** Deletes only after it was asked twice. */
+export function AskedTwice({ label, question, text, failed, onRemove, busy, error, testID }: AskedTwiceProps) {
+  const [asked, setAsked] = useState(false);
+  const group = useRef<HTMLDivElement>(null);
+  const opener = useRef<HTMLDivElement>(null);
+  const keep = () => {
+    setAsked(false);
+    requestAnimationFrame(() => opener.current?.querySelector("button")?.focus());
+  };
+  useEffect(() => {
+    if (!asked) return;
+    group.current?.focus({ preventScroll: true });
+    // The foot of the phone stands over the end of the page: in the middle the whole question is seen.
+    group.current?.scrollIntoView({ block: "center" });
+  }, [asked]);
+  if (!asked)
+    return (
+      <div ref={opener}>
+        <Button kind="text" small icon="trash" label={label} onPress={() => setAsked(true)} testID={testID} />
+      </div>
+    );
+  return (
+    <div ref={group} role="group" aria-label={question} tabIndex={-1}>
+      <Notice kind="caution" title={question} testID="remove-asked">
+        <Text variant="small">{text}</Text>
+        {error && (
+          <Text variant="small" tone="brick">
+            {`${failed} ${error.message}`}
+          </Text>
+        )}
+        <View style={{ flexDirection: "row", flexWrap: "wrap", gap: 8, marginTop: 8 }}>
+          <Button small label="Delete it" busy={busy} onPress={onRemove} testID="remove-confirmed" />
+          <Button kind="secondary" small label="Keep it" onPress={keep} />
+        </View>
+      </Notice>
+    </div>
+  );
+}

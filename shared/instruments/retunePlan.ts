@@ -3,7 +3,7 @@ import type { Instrument } from "./instrument";
 import { isWound, tensionChanges, totalTension, type TensionChange, type TensionTotal } from "./tension";
 
 /** One turn at a peg. */
-export interface RetuneStep {
+interface RetuneStep {
   /** place in the instrument's strings */
   string: number;
   from: string;

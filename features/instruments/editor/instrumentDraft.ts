@@ -20,7 +20,7 @@ export interface StringDraft {
   startsAt: string;
 }
 
-export type FretKind = "chromatic" | "diatonic" | "diatonic-half" | "custom";
+type FretKind = "chromatic" | "diatonic" | "diatonic-half" | "custom";
 
 /** An instrument as it is being typed. */
 export interface InstrumentDraft {

@@ -1,6 +1,7 @@
 import { useQuery } from "@tanstack/react-query";
 import { useLocalSearchParams, useRouter } from "expo-router";
-import { askedKey } from "@/features/keys/songKeys";
+import { askedKey, writtenKeyOf } from "@/features/keys/songKeys";
+import { KeyUnknown } from "@/features/keys/tryout/KeyUnknown";
 import { TryScreen } from "@/features/keys/tryout/TryScreen";
 import { useSongKeys } from "@/features/keys/useSongKeys";
 import { ChartView } from "@/features/songs/ChartView";
@@ -15,7 +16,7 @@ export default function TryRoute() {
   const { id } = useLocalSearchParams<{ id: string }>();
   return (
     <SongState query={useQuery(songQueries.detail(id))} title="Try it">
-      {(song) => <TryIt key={song.id} song={song} />}
+      {(song) => (writtenKeyOf(song) ? <TryIt key={song.id} song={song} /> : <KeyUnknown song={song} />)}
     </SongState>
   );
 }

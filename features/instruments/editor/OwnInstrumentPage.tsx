@@ -108,7 +108,8 @@ function Present({ own, owned, onDone, onOpen }: PresentProps) {
           testID="remove-instrument"
           busy={remove.isPending}
           error={remove.error}
-          onRemove={() => remove.mutate(own.id, { onSuccess: onDone })}
+          // The page of what is gone goes too: its own callback would not be heard any more.
+          onRemove={() => void remove.mutateAsync(own.id).then(onDone, () => undefined)}
         />
       </View>
     </InstrumentEditor>

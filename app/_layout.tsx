@@ -36,6 +36,7 @@ const parts: LazyPart[] = [
   () => import("./instruments/new"),
   () => import("./instruments/[id]"),
   () => import("./instruments/retune"),
+  () => import("./known-shapes"),
   () => import("./account/index"),
   () => import("./account/sign-in"),
   () => import("./account/sign-up"),

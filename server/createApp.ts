@@ -21,6 +21,7 @@ import type { FakeSmtp } from "./mail/inbox/fakeSmtp";
 import { inboxPage } from "./mail/inbox/inboxPage";
 import { mailRoutes } from "./mail/mail.router";
 import { voicesRoutes } from "./voices/voices.router";
+import { playerWishesRoutes } from "./ways/playerWishes.router";
 
 type AppSettings = Pick<Env, "tokenSecret" | "publicOrigin" | "trustProxy" | "staticDir"> & {
   /** where mails go that are really sent to nobody; shown at /dev/inbox */
@@ -41,6 +42,7 @@ export function createApp(dataSource: DataSource, logger: Logger, settings: AppS
   songsRoutes(api, dataSource);
   keysRoutes(api, dataSource);
   instrumentsRoutes(api, dataSource);
+  playerWishesRoutes(api, dataSource);
   chartsRoutes(api, dataSource);
   mailRoutes(api, dataSource, settings);
   healthRoutes(api, dataSource);

@@ -1,6 +1,7 @@
 import { signInRequest, signUpRequest } from "@/shared/contract/account";
 import { decision } from "@/shared/contract/decision";
 import { ownInstrument } from "@/shared/contract/instrument";
+import { playerWishes } from "@/shared/contract/playerWishes";
 import { pageOfSongs, tagsOfSongs } from "@/features/api/deviceSongs";
 import type { SongQuestion } from "@/features/api/songQuestion";
 import { song, type Song } from "@/shared/contract/song";
@@ -32,6 +33,7 @@ const schemas = {
   decisions: decision,
   tries: songTry,
   instruments: ownInstrument,
+  wishes: playerWishes,
 };
 type Name = keyof typeof schemas;
 
@@ -54,6 +56,7 @@ export class FakeApi {
     decisions: new Map(),
     tries: new Map(),
     instruments: new Map(),
+    wishes: new Map(),
   };
   /** Earlier states of songs, by their id, newest first. Each change keeps the state before: nobody pauses here. */
   readonly versions = new Map<string, SongVersion[]>();

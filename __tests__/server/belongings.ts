@@ -1,6 +1,7 @@
 import { randomUUID } from "node:crypto";
 import type { Decision } from "../../shared/contract/decision";
 import type { OwnInstrument } from "../../shared/contract/instrument";
+import type { PlayerWishes } from "../../shared/contract/playerWishes";
 import type { Song } from "../../shared/contract/song";
 import type { Take } from "../../shared/contract/take";
 import type { Try } from "../../shared/contract/try";
@@ -121,6 +122,20 @@ export function aTry(songId: string, voiceId: string | null, changes: Partial<Tr
       pitches: [{ midi: 71, wantedS: 1.5, sungS: 1.2, offCents: 150, fellShort: "above" }],
       summary: ["Most of it was in tune."],
     },
+    ...changes,
+  };
+}
+
+export function someWishes(changes: Partial<PlayerWishes> = {}): PlayerWishes {
+  return {
+    id: randomUUID(),
+    noBarre: true,
+    noCapo: false,
+    neverRetune: true,
+    keepRinging: false,
+    highestCapo: 5,
+    known: [{ tuning: "5 5 5 4 5", shapes: ["3 2 0 0 0 3", "x 3 2 0 1 0"] }],
+    changedAt: instant,
     ...changes,
   };
 }

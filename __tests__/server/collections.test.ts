@@ -1,6 +1,6 @@
 import { randomUUID } from "node:crypto";
 import request from "supertest";
-import { aDecision, anInstrument, aSong, aTake, aTry, aVoice } from "./belongings";
+import { aDecision, anInstrument, aSong, aTake, aTry, aVoice, someWishes } from "./belongings";
 import { Person, startTestServer, type TestServer } from "./testServer";
 
 let server: TestServer;
@@ -74,6 +74,13 @@ const collections: Collection[] = [
     change: { fretMap: [2, 4, 5, 7], favourite: true },
     spoil: { strings: [{ note: "Q4", gaugeIn: null, material: "nylon" }] },
     spoiled: "strings.0.note",
+  },
+  {
+    name: "wishes",
+    make: someWishes,
+    change: { neverRetune: false, known: [] },
+    spoil: { known: [{ tuning: "5 4", shapes: ["two fingers"] }] },
+    spoiled: "known.0.shapes.0",
   },
 ];
 

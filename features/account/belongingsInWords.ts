@@ -8,6 +8,7 @@ const words: Record<Collection, readonly [one: string, many: string]> = {
   decisions: ["chosen key", "chosen keys"],
   tries: ["tried key", "tried keys"],
   instruments: ["instrument", "instruments"],
+  wishes: ["set of wishes", "sets of wishes"],
 };
 
 /** "1 voice, 3 takes and 2 songs"; null where there is nothing. */

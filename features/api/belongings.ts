@@ -12,18 +12,19 @@ export interface Belongings {
 
 /** Reads the whole device shelf. */
 export async function readBelongings(): Promise<Belongings> {
-  const [voices, takes, songs, decisions, tries, instruments] = await Promise.all([
+  const [voices, takes, songs, decisions, tries, instruments, wishes] = await Promise.all([
     deviceShelf.list("voices"),
     deviceShelf.list("takes"),
     deviceShelf.list("songs"),
     deviceShelf.list("decisions"),
     deviceShelf.list("tries"),
     deviceShelf.list("instruments"),
+    deviceShelf.list("wishes"),
   ]);
   const decided = new Set([...decisions, ...tries].map(({ songId }) => songId));
   const untouched = new Set<string>();
   for (const song of songs) if (!decided.has(song.id) && (await deviceShelf.isAsSeeded(song))) untouched.add(song.id);
-  return { items: { voices, takes, songs, decisions, tries, instruments }, untouched };
+  return { items: { voices, takes, songs, decisions, tries, instruments, wishes }, untouched };
 }
 
 /** What the person did on this device, without the demonstration as it came. */
@@ -36,5 +37,6 @@ export async function countBelongings(): Promise<Counts> {
     decisions: items.decisions.length,
     tries: items.tries.length,
     instruments: items.instruments.length,
+    wishes: items.wishes.length,
   };
 }

@@ -1,5 +1,6 @@
 import type { Decision } from "@/shared/contract/decision";
 import type { OwnInstrument } from "@/shared/contract/instrument";
+import type { PlayerWishes } from "@/shared/contract/playerWishes";
 import type { Song } from "@/shared/contract/song";
 import type { Take } from "@/shared/contract/take";
 import type { Try } from "@/shared/contract/try";
@@ -13,6 +14,7 @@ export interface Items {
   decisions: Decision;
   tries: Try;
   instruments: OwnInstrument;
+  wishes: PlayerWishes;
 }
 
 export type Collection = keyof Items;
@@ -25,6 +27,7 @@ export const collections = [
   "decisions",
   "tries",
   "instruments",
+  "wishes",
 ] as const satisfies readonly Collection[];
 
 /** What may be asked for when something is kept. */

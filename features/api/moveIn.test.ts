@@ -194,7 +194,15 @@ describe("the demonstration", () => {
 
   it("is not counted as something the person did", async () => {
     await seed();
-    expect(await countBelongings()).toEqual({ voices: 0, takes: 0, songs: 2, decisions: 1, tries: 0, instruments: 0 });
+    expect(await countBelongings()).toEqual({
+      voices: 0,
+      takes: 0,
+      songs: 2,
+      decisions: 1,
+      tries: 0,
+      instruments: 0,
+      wishes: 0,
+    });
   });
 
   it("of an interrupted sign-up still arrives, unless the account has it", async () => {

@@ -40,6 +40,7 @@ function titleOf(name: Collection, item: Items[Collection]): string {
   if ("name" in item) return item.name;
   if (name === "takes") return `A take of ${(item as Items["takes"]).sungAt.slice(0, 10)}`;
   if (name === "tries") return `A key tried on ${(item as Items["tries"]).sungAt.slice(0, 10)}`;
+  if (name === "wishes") return "Your wishes and the shapes you know";
   return "The key you chose for a song";
 }
 

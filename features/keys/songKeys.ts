@@ -6,6 +6,7 @@ import { parseChord, transposeChord } from "@/shared/music/chord";
 import { type KeyName, tonicPitchClass } from "@/shared/music/keyName";
 import { movedKey } from "@/shared/music/keyWords";
 import { chartChords, parseChart } from "@/shared/songs/chart";
+import { playedChords } from "@/shared/songs/playedChords";
 import { decidedElsewhere, stillFits } from "./decision/decide";
 import { keyRows, rowOf, type KeyRow } from "./keyRows";
 
@@ -21,6 +22,11 @@ export function writtenKeyOf(song: Pick<Song, "writtenKey" | "tune">): KeyName |
 /** The song's chords as written, each once. */
 export function songChords(song: Pick<Song, "chart">): string[] {
   return chartChords(parseChart(song.chart));
+}
+
+/** The same as they are played, with repeats. */
+export function songSequence(song: Pick<Song, "chart">): string[] {
+  return playedChords(parseChart(song.chart));
 }
 
 /** Chords moved into a key. */

@@ -17,7 +17,7 @@ import { noFitWords, wholeVoice, type KeyRow } from "./keyRows";
 import { triesOfVoice, voiceAfter } from "./tryout/kept/triedRows";
 import { tryQueries, useSendWaiting } from "./tryout/tryQueries";
 import { sameKey } from "./sameKey";
-import { keyInHand, keyRowsOf, songChords, writtenKeyOf, type KeyInHand } from "./songKeys";
+import { keyInHand, keyRowsOf, songChords, songSequence, writtenKeyOf, type KeyInHand } from "./songKeys";
 
 /** The keys of one song for one voice, with what was decided and the way to decide anew. */
 export interface SongKeys {
@@ -34,7 +34,7 @@ export interface SongKeys {
   noFit: string | null;
   inHand: KeyInHand | null;
   /** the chords as written, and the key they stand in; null where there is none of either */
-  written: { chords: string[]; from: KeyName } | null;
+  written: { chords: string[]; sequence: string[]; from: KeyName } | null;
   /** what was decided before and for other voices */
   history: DecisionHistory | null;
   /** the key that was last taken back or let go of, while it can be brought back */
@@ -94,7 +94,7 @@ export function useSongKeys(
   const written = useMemo(() => {
     const from = writtenKeyOf(song);
     const chords = songChords(song);
-    return from && chords.length > 0 ? { chords, from } : null;
+    return from && chords.length > 0 ? { chords, sequence: songSequence(song), from } : null;
   }, [song]);
   return {
     rows,

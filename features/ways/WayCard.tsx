@@ -11,6 +11,12 @@ import type { Instrument } from "@/shared/instruments/instrument";
 import type { Way } from "@/shared/ways/way";
 import { WayGrids } from "./WayGrids";
 
+/** What a player knows, and how to change it. */
+export interface ShapeTicks {
+  known: readonly string[];
+  onKnown: (mark: string, known: boolean) => void;
+}
+
 export interface WayCardProps {
   way: Way;
   instrument: Instrument;
@@ -18,10 +24,14 @@ export interface WayCardProps {
   /** keyboard and focus of this one button of the group */
   radio: object;
   onChoose: () => void;
+  /** also why it is easy or hard, and how far the hand travels */
+  full?: boolean;
+  /** where the player may tell which shapes they know */
+  ticks?: ShapeTicks | undefined;
 }
 
 /** One way: what to do, what it costs, the shapes, and what to take care of. */
-export function WayCard({ way, instrument, chosen, radio, onChoose }: WayCardProps) {
+export function WayCard({ way, instrument, chosen, radio, onChoose, full = false, ticks }: WayCardProps) {
   const id = useId();
   return (
     <>
@@ -40,10 +50,15 @@ export function WayCard({ way, instrument, chosen, radio, onChoose }: WayCardPro
           <Text variant="small" tone="soft" nativeID={`${id}-cost`} style={{ lineHeight: 19, marginTop: 2 }}>
             {way.cost}
           </Text>
+          {full && (
+            <Text variant="small" tone="soft" style={{ lineHeight: 19, marginTop: 2 }} testID="way-why">
+              {`${way.why} ${way.travel}`}
+            </Text>
+          )}
         </View>
         <RadioDot on={chosen} />
       </Pressable>
-      <WayGrids way={way} instrument={instrument} />
+      <WayGrids way={way} instrument={instrument} {...ticks} />
       {chosen && (way.retune !== 0 || way.capo > 0) && (
         <TextLink href={tunePath(instrument.id, way.retune, way.capo)}>Tune for this, string by string</TextLink>
       )}

@@ -7,15 +7,21 @@ import { fretName } from "@/shared/instruments/frets";
 import type { Instrument } from "@/shared/instruments/instrument";
 import { parseChord } from "@/shared/music/chord";
 import { glyphs } from "@/shared/music/pitch";
+import { insteadOf } from "@/shared/ways/insteadOf";
 import type { Way, WayChord } from "@/shared/ways/way";
+import { KnownTick } from "./wishes/KnownTick";
 
 export interface WayGridsProps {
   way: Way;
   instrument: Instrument;
+  /** where the player may tell which shapes they know: called with the shape's mark */
+  onKnown?: ((mark: string, known: boolean) => void) | undefined;
+  /** marks of the shapes the player knows */
+  known?: readonly string[];
 }
 
 /** The shapes of one way, as many beside each other as there is room for. */
-export function WayGrids({ way, instrument }: WayGridsProps) {
+export function WayGrids({ way, instrument, onKnown, known = [] }: WayGridsProps) {
   const moved = way.retune !== 0 || way.capo !== 0;
   const column = Math.max(80, gridWidth(instrument.strings.length) + 8);
   const lines = Math.max(1, ...way.chords.map(({ played }) => nameLines(glyphs(played)).length));
@@ -29,7 +35,12 @@ export function WayGrids({ way, instrument }: WayGridsProps) {
       })}
     >
       {way.chords.map((chord) => (
-        <Grid key={chord.written} chord={chord} way={way} instrument={instrument} moved={moved} lines={lines} />
+        <View key={chord.written} style={{ alignItems: "center" }}>
+          <Grid chord={chord} way={way} instrument={instrument} moved={moved} lines={lines} />
+          {onKnown && chord.shape && (
+            <KnownTick name={chord.played} frets={chord.shape.frets} known={known} onKnown={onKnown} />
+          )}
+        </View>
       ))}
     </View>
   );
@@ -73,7 +84,7 @@ function Grid({
       </Text>
       {parseChord(chord.played) && (
         <Text variant="tiny" tone="brick" style={{ textAlign: "center" }}>
-          No shape on this instrument
+          {`No shape here: ${insteadOf(chord.played, instrument, way.capo)}`}
         </Text>
       )}
     </View>

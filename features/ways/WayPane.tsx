@@ -4,12 +4,14 @@ import { EmptyState } from "@/features/ui/EmptyState";
 import { ErrorState } from "@/features/ui/ErrorState";
 import { LinkButton } from "@/features/ui/LinkButton";
 import { Skeleton } from "@/features/ui/Skeleton";
+import { useLayout } from "@/features/ui/useLayout";
 import type { KeyName } from "@/shared/music/keyName";
 import { keySign } from "@/shared/music/keyWords";
 import { glyphs } from "@/shared/music/pitch";
 import type { Instrument } from "@/shared/instruments/instrument";
 import type { Way } from "@/shared/ways/way";
 import { differentWays } from "@/shared/ways/wayOrder";
+import type { ShapeTicks } from "./WayCard";
 import { WayList } from "./WayList";
 import { takeLabel, takeLabelIn, wayKept } from "./wayWords";
 
@@ -35,6 +37,9 @@ export interface WayPaneProps {
   named?: boolean;
   /** how many ways are shown at first; all unless told otherwise */
   most?: number;
+  /** all ways in full, the different ones beside each other where there is room, with ticks for the shapes one knows */
+  full?: boolean;
+  ticks?: ShapeTicks | undefined;
   /** where the ways stand, and where the button that takes one */
   children: (parts: { list: ReactNode; use: ReactNode }) => ReactNode;
 }
@@ -51,12 +56,15 @@ export function WayPane({
   onUse,
   named = false,
   most,
+  full = false,
+  ticks,
   children,
 }: WayPaneProps) {
   const [chosen, setChosen] = useState<string | null>(null);
+  const wide = useLayout() === "wide";
   const found = search.data;
   const keptWay = found ? wayKept(found, kept) : null;
-  const shown = found ? differentWays(found, most ?? found.length) : [];
+  const shown = found ? shownOf(found, most) : [];
   const ways = keptWay && !shown.includes(keptWay) ? [...shown, keptWay] : shown;
   const at = Math.max(
     0,
@@ -119,6 +127,9 @@ export function WayPane({
         instrument={instrument}
         chosen={at}
         onChoose={(index) => setChosen(idOf(into, ways[index]))}
+        columns={full && wide ? Math.min(3, ways.length) : 1}
+        full={full}
+        ticks={ticks}
       />
     ),
     use: (
@@ -131,6 +142,14 @@ export function WayPane({
       />
     ),
   });
+}
+
+/** The really different ones first: nothing changed, capo, retune, both; then all others, best first. */
+function shownOf(found: readonly Way[], most: number | undefined): Way[] {
+  if (most !== undefined) return differentWays(found, most);
+  const kinds = new Set(found.map(({ kind }) => kind)).size;
+  const different = differentWays(found, kinds);
+  return [...different, ...found.filter((way) => !different.includes(way))];
 }
 
 function idOf(into: KeyName | null, way: Way | undefined): string | null {

@@ -5,7 +5,6 @@ import { Notice } from "@/features/ui/Notice";
 import { Screen } from "@/features/ui/Screen";
 import { colors } from "@/features/ui/theme";
 import { useLayout } from "@/features/ui/useLayout";
-import { WishPanel } from "./WishPanel";
 
 export interface WaysScreenProps {
   song: { id: string; title: string };
@@ -21,19 +20,31 @@ export interface WaysScreenProps {
   /** the decided key, with when and why */
   decided: ReactNode;
   error: Error | null;
+  /** what the player would do without, and the shapes they know */
+  wishes: ReactNode;
 }
 
-/** Ways to play one song in one key; beside them, or under them on the phone, the chart in that key. */
-export function WaysScreen({ song, sign, instrument, chooser, list, use, chart, decided, error }: WaysScreenProps) {
+/** Ways to play one song in one key, side by side where there is room; under them the chart in that key. */
+export function WaysScreen({
+  song,
+  sign,
+  instrument,
+  chooser,
+  list,
+  use,
+  chart,
+  decided,
+  error,
+  wishes,
+}: WaysScreenProps) {
   const phone = useLayout() === "phone";
-  const column = { flexGrow: 1, flexShrink: 1, flexBasis: 0, minWidth: 0 } as const;
   const main = (
     <View style={{ gap: 8 }}>
       {error && (
         <Notice kind="error" title="This is not saved">{`${error.message} The ways are still here; try again.`}</Notice>
       )}
       {chooser}
-      <WishPanel />
+      {wishes}
       {list}
       {decided}
     </View>
@@ -64,9 +75,9 @@ export function WaysScreen({ song, sign, instrument, chooser, list, use, chart, 
           {aside}
         </>
       ) : (
-        <View style={{ flexDirection: "row", gap: 32 }}>
-          <View style={column}>{main}</View>
-          <View style={column}>{aside}</View>
+        <View style={{ gap: 32 }}>
+          {main}
+          {aside}
         </View>
       )}
     </Screen>

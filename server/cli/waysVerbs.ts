@@ -7,6 +7,7 @@ import type { KeyName } from "../../shared/music/keyName";
 import { parseNoteName, plainAccidentals } from "../../shared/music/pitch";
 import { chartChords, parseChart } from "../../shared/songs/chart";
 import { findKey } from "../../shared/songs/findKey";
+import { playedChords } from "../../shared/songs/playedChords";
 import { findShapes } from "../../shared/ways/findShapes";
 import { findWays } from "../../shared/ways/findWays";
 import { readInput, songSize } from "./inputFile";
@@ -66,7 +67,7 @@ export const waysVerb: Verb = {
     const from = values.from === undefined ? findKey({ chart })?.key : readKey(values.from, "from");
     if (!from) throw new BadInput(`The key of ${basename(path)} cannot be found; add --from.`);
     const to = readTarget(required(values.to, "to"), from);
-    return findWays({ chords, from, to, instrument }).map((way) => ({
+    return findWays({ chords, sequence: playedChords(chart), from, to, instrument }).map((way) => ({
       retune: way.retune,
       capo: way.capo,
       shapeKey: way.shapeKey,

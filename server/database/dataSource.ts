@@ -7,11 +7,13 @@ import { TryEntity } from "../keys/try.entity";
 import { SongEntity } from "../songs/song.entity";
 import { TakeEntity } from "../voices/take.entity";
 import { VoiceEntity } from "../voices/voice.entity";
+import { PlayerWishesEntity } from "../ways/playerWishes.entity";
 import { FirstTables1764547200000 } from "./migrations/FirstTables1764547200000";
 import { InstrumentPhotos1778000000000 } from "./migrations/InstrumentPhotos1778000000000";
 import { KeysPerVoice1775001600000 } from "./migrations/KeysPerVoice1775001600000";
 import { KindOfTake1767225600000 } from "./migrations/KindOfTake1767225600000";
 import { MailAndJobs1782000000000 } from "./migrations/MailAndJobs1782000000000";
+import { PlayerWishes1779000000000 } from "./migrations/PlayerWishes1779000000000";
 import { SongRevisions1769904000000 } from "./migrations/SongRevisions1769904000000";
 import { SongVersions1772323200000 } from "./migrations/SongVersions1772323200000";
 
@@ -20,7 +22,16 @@ const common: Pick<
   "type" | "entities" | "synchronize" | "uuidExtension" | "installExtensions" | "invalidWhereValuesBehavior"
 > = {
   type: "postgres",
-  entities: [UserEntity, VoiceEntity, TakeEntity, SongEntity, DecisionEntity, TryEntity, InstrumentEntity],
+  entities: [
+    UserEntity,
+    VoiceEntity,
+    TakeEntity,
+    SongEntity,
+    DecisionEntity,
+    TryEntity,
+    InstrumentEntity,
+    PlayerWishesEntity,
+  ],
   synchronize: false,
   uuidExtension: "pgcrypto",
   installExtensions: false,
@@ -60,6 +71,7 @@ export function createMigrationSource(url: string): DataSource {
       SongVersions1772323200000,
       KeysPerVoice1775001600000,
       InstrumentPhotos1778000000000,
+      PlayerWishes1779000000000,
       MailAndJobs1782000000000,
     ],
     migrationsTransactionMode: "all",

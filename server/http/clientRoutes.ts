@@ -24,6 +24,7 @@ export const clientRoutes = [
   "/instruments/new",
   "/instruments/retune",
   "/instruments/:id",
+  "/known-shapes",
   "/account",
   "/account/sign-in",
   "/account/sign-up",

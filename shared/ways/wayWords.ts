@@ -3,6 +3,7 @@ import { glyphs } from "../music/pitch";
 import { fretName } from "../instruments/frets";
 import type { Instrument } from "../instruments/instrument";
 import { tensionRatio } from "../instruments/tension";
+import { insteadOf } from "./insteadOf";
 import { leftOutWords } from "./leftOutTones";
 import { missingShapes, missingWords } from "./missingShapes";
 import type { Shape, StringChange, Way, WayChord } from "./way";
@@ -119,8 +120,20 @@ function withinFrets(highest: number, instrument: Instrument): string {
  */
 export function wayCautions({ retune, capo, chords, withoutBass, strings, instrument }: WayFacts): string[] {
   const cautions: string[] = [];
-  const missing = missingShapes(chords).names.map(glyphs);
-  if (missing.length > 0) cautions.push(`This instrument has no playable shape for ${list(missing)}.`);
+  const { names } = missingShapes(chords);
+  if (names.length > 0) {
+    cautions.push(`This instrument has no playable shape for ${list(names.map(glyphs))}.`);
+    for (const name of new Set(names)) cautions.push(`For ${glyphs(name)}, ${insteadOf(name, instrument, capo)}.`);
+  }
+  const fresh = chords
+    .filter(({ known, shape }) => known === false && shape !== null)
+    .map(({ played }) => glyphs(played));
+  if (fresh.length > 0 && fresh.length <= 2 && fresh.length < chords.length)
+    cautions.push(
+      fresh.length === 1
+        ? `${fresh[0]} is the new shape: three minutes with it first.`
+        : `${list(fresh)} are the new shapes: a few minutes with them first.`,
+    );
   const partial = chords.map(({ played, shape }) => (shape ? leftOutWords(played, shape, instrument) : null));
   cautions.push(...new Set(partial.filter((words) => words !== null)));
   if (retune !== 0) cautions.push(...tensionCautions(retune, strings, instrument));

@@ -11,7 +11,7 @@ import { songQueries } from "@/features/songs/songQueries";
 import { useSingingVoice } from "@/features/voice/useSingingVoice";
 import { BestWay } from "@/features/ways/BestWay";
 import { useFoundWays } from "@/features/ways/wayQueries";
-import { useWishes } from "@/features/ways/wishes";
+import { useWishes } from "@/features/ways/wishes/useWishes";
 import type { Song } from "@/shared/contract/song";
 
 export default function CompareRoute() {

@@ -18,7 +18,7 @@ import { useSingingVoice } from "@/features/voice/useSingingVoice";
 import { WayColumn } from "@/features/ways/WayColumn";
 import { WayPane } from "@/features/ways/WayPane";
 import { wayQueries } from "@/features/ways/wayQueries";
-import { useWishes } from "@/features/ways/wishes";
+import { useWishes } from "@/features/ways/wishes/useWishes";
 import type { Song } from "@/shared/contract/song";
 
 export default function SongRoute() {

@@ -11,7 +11,7 @@ import { useLayout } from "@/features/ui/useLayout";
 import { useSingingVoice } from "@/features/voice/useSingingVoice";
 import { useFoundWays } from "@/features/ways/wayQueries";
 import { wayInRow } from "@/features/ways/wayWords";
-import { useWishes } from "@/features/ways/wishes";
+import { useWishes } from "@/features/ways/wishes/useWishes";
 import type { Song } from "@/shared/contract/song";
 
 export default function KeysRoute() {

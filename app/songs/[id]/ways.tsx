@@ -1,5 +1,6 @@
 import { useQuery } from "@tanstack/react-query";
 import { useLocalSearchParams } from "expo-router";
+import { useState } from "react";
 import { InstrumentSelect } from "@/features/instruments/InstrumentSelect";
 import { instrumentWords } from "@/features/instruments/myInstruments";
 import { useInstrument, useInstrumentNames } from "@/features/instruments/useInstrument";
@@ -12,8 +13,10 @@ import { songQueries } from "@/features/songs/songQueries";
 import { useSingingVoice } from "@/features/voice/useSingingVoice";
 import { WayPane } from "@/features/ways/WayPane";
 import { wayQueries } from "@/features/ways/wayQueries";
+import { ticksOn } from "@/features/ways/wishes/shapeTicks";
 import { WaysScreen } from "@/features/ways/WaysScreen";
-import { useWishes } from "@/features/ways/wishes";
+import { useWishes } from "@/features/ways/wishes/useWishes";
+import { WishPanel } from "@/features/ways/wishes/WishPanel";
 import type { Song } from "@/shared/contract/song";
 import { keySign } from "@/shared/music/keyWords";
 import { glyphs } from "@/shared/music/pitch";
@@ -29,7 +32,8 @@ export default function WaysRoute() {
 
 function Ways({ song }: { song: Song }) {
   const asked = useLocalSearchParams<{ key?: string; shift?: string }>();
-  const [wishes] = useWishes();
+  const [wishes, keepWishes, notKept] = useWishes();
+  const [ticking, setTicking] = useState(false);
   const keys = useSongKeys(song, useSingingVoice(), useInstrumentNames());
   const { instrument, owned, choose, settle, error } = useInstrument(song.id, keys.decision?.instrument ?? null);
   const { key, shift } = askedKey(song, keys.inHand, asked.key, asked.shift);
@@ -44,6 +48,8 @@ function Ways({ song }: { song: Song }) {
       instrument={instrument}
       kept={mine?.instrument === instrument.id ? mine.way : null}
       saving={keys.saving}
+      full
+      ticks={ticking ? ticksOn(instrument, wishes, keepWishes) : undefined}
       onUse={(way) => keys.take({ tonic: key.tonic, shift, instrument: instrument.id, way }, settle)}
     >
       {(parts) => (
@@ -54,7 +60,8 @@ function Ways({ song }: { song: Song }) {
           chooser={<InstrumentSelect owned={owned} value={instrument.id} onChange={choose} />}
           {...parts}
           chart={<MovedChart song={song} to={key} level={3} />}
-          error={keys.error ?? error}
+          wishes={<WishPanel instrument={instrument} songId={song.id} open={ticking} onOpen={setTicking} />}
+          error={keys.error ?? error ?? notKept}
           decided={<DecisionCard keys={keys} style={{ marginTop: 8 }} />}
         />
       )}

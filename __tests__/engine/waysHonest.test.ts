@@ -5,8 +5,11 @@ import { parseChord } from "@/shared/music/chord";
 import { spellTonic, type KeyName } from "@/shared/music/keyName";
 import { findShapes } from "@/shared/ways/findShapes";
 import { findWays } from "@/shared/ways/findWays";
+import { insteadOf } from "@/shared/ways/insteadOf";
 import { leftOutWords } from "@/shared/ways/leftOutTones";
 import { missingShapes, missingWords } from "@/shared/ways/missingShapes";
+import { travelWords } from "@/shared/ways/travelWords";
+import { defaultPreferences } from "@/shared/ways/wayCandidates";
 
 const major = (tonic: string): KeyName => ({ tonic, mode: "major" });
 const dulcimer = findPreset("dulcimer")!;
@@ -24,7 +27,7 @@ test("no way lets the strings down only to clamp them up again", () => {
   );
 });
 
-test("ways of one kind, and the first of each kind, stand in the order of missing shapes", () => {
+test("ways stand in the order of missing shapes, the chart as written and the bare instrument at the end where they cost too much", () => {
   const uneven = everyKey.flatMap((to) =>
     presets.map((instrument) =>
       findWays({ chords: ["C", "F", "Ebm", "B7"], from: major("C"), to, instrument }).map((way) => ({
@@ -35,9 +38,9 @@ test("ways of one kind, and the first of each kind, stand in the order of missin
   );
   expect(uneven.some((ways) => new Set(ways.map(({ missing }) => missing)).size > 1)).toBe(true);
   for (const ways of uneven) {
-    const heads = ways.filter((way, k) => ways.findIndex(({ kind }) => kind === way.kind) === k);
-    for (const list of [heads, ways.slice(heads.length)])
-      expect(list.map(({ missing }) => missing)).toEqual([...list].map(({ missing }) => missing).sort((a, b) => a - b));
+    // Behind the ways worth proposing stand those that are shown all the same, again in that order.
+    const counts = ways.map(({ missing }) => missing);
+    expect(counts).toEqual([...counts].sort((a, b) => a - b));
   }
 });
 
@@ -110,4 +113,38 @@ describe("tones that a shape leaves out", () => {
       "C13 as C7: the 13th does not fit on three strings.",
     );
   });
+});
+
+test("where a chord has no shape, something to play instead is said", () => {
+  // The dulcimer's frets have no E flat at all, and no F.
+  const asIs = (chord: string) =>
+    findWays({ chords: ["D", chord], from: major("D"), to: major("D"), instrument: dulcimer }).find(
+      ({ kind }) => kind === "as-is",
+    )!.cautions;
+  expect(asIs("Ebm")).toContain("For E♭m, let the strings be silent there.");
+  expect(insteadOf("C#", dulcimer, 0)).toMatch(/^(?:play|pluck its root alone: the) /);
+  expect(insteadOf("N.C.", dulcimer, 0)).toBeNull();
+});
+
+test("one or two new shapes among known ones are named", () => {
+  const preferences = { ...defaultPreferences, knownShapes: ["C", "G", "Am"] };
+  const ways = findWays({
+    chords: ["C", "G", "Am", "F"],
+    from: major("C"),
+    to: major("C"),
+    instrument: findPreset("guitar")!,
+    preferences,
+  });
+  const asIs = ways.find(({ kind }) => kind === "as-is")!;
+  expect(asIs.chords.map(({ known }) => known)).toEqual([true, true, true, false]);
+  expect(asIs.cautions).toContain("F is the new shape: three minutes with it first.");
+});
+
+test.each([
+  [0, "The hand stays in one place."],
+  [60, "The hand travels 60 mm along the neck, the song through."],
+  [384, "The hand travels 38 cm along the neck, the song through."],
+  [2310, "The hand travels 2.3 m along the neck, the song through."],
+])("a hand that travels %i mm is told so", (mm, words) => {
+  expect(travelWords(mm)).toBe(words);
 });

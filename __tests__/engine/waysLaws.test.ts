@@ -7,6 +7,7 @@ import { chordPitchClasses, parseChord, transposeChord } from "@/shared/music/ch
 import { spellTonic, tonicPitchClass, type KeyName } from "@/shared/music/keyName";
 import { findWays } from "@/shared/ways/findWays";
 import type { Way, WayPreferences } from "@/shared/ways/way";
+import { wayCandidates } from "@/shared/ways/wayCandidates";
 import { differentWays } from "@/shared/ways/wayOrder";
 
 const major = (tonic: string): KeyName => ({ tonic, mode: "major" });
@@ -127,6 +128,36 @@ describe("laws of the ways", () => {
           findWays({ chords: inKey(chords, from), from, to, instrument, preferences: { ...wishes, barre } })[0]!;
         expect(barres(first(1))).toBeLessThanOrEqual(barres(first(0)));
       }),
+      runs,
+    );
+  });
+
+  test("the more a wish about shapes weighs, the less of what it is against is in the first way", () => {
+    const wish = fc.constantFrom("barre" as const, "ringing" as const, "familiar" as const);
+    const levels = fc.tuple(fc.double({ min: 0, max: 1, noNaN: true }), fc.double({ min: 0, max: 1, noNaN: true }));
+    const marks = fc.constantFrom(["3 2 0 0 0 3", "x 3 2 0 1 0"], ["0 0 0", "1 1 1"], ["0 0 0 3", "2 0 1 0"]);
+    fc.assert(
+      fc.property(
+        song,
+        preset,
+        preferences,
+        wish,
+        levels,
+        marks,
+        ({ chords, from, to }, instrument, wishes, what, [a, b], knownMarks) => {
+          const amounts = (level: number) => {
+            const question = { chords: inKey(chords, from), from, to, instrument };
+            const asked = { ...question, preferences: { ...wishes, knownMarks, [what]: level } };
+            const [first] = findWays(asked);
+            const found = wayCandidates(asked).find(
+              ({ retune, capo }) => retune === first!.retune && capo === first!.capo,
+            );
+            const { barres, stopped, unknown } = found!.played.amounts;
+            return { barre: barres, ringing: stopped, familiar: unknown }[what];
+          };
+          expect(amounts(Math.max(a, b))).toBeLessThanOrEqual(amounts(Math.min(a, b)) + 1e-9);
+        },
+      ),
       runs,
     );
   });

@@ -101,6 +101,12 @@ const commands = {
     const args = [...typescript, path.join(root, "__tests__", "bench", "keysBench.ts"), ...process.argv.slice(3)];
     await together([{ args, env: {} }]);
   },
+
+  async "bench:ways"() {
+    await ensurePackages({ root, say });
+    const args = [...typescript, path.join(root, "__tests__", "bench", "waysBench.ts"), ...process.argv.slice(3)];
+    await together([{ args, env: {} }]);
+  },
 };
 
 /** Runs a program that plays with the whole product in a browser. */

@@ -101,15 +101,26 @@ function optionsOf(stock: ShapeStock, name: string, player: Player | null, playi
     let disliked = barre * barreStrings + stopped * (instrument.strings.length - openStrings);
     if (unknown > 0 && !player!.knows(shape, name, stock)) disliked += unknown;
     const place = places[lowestFret]!;
-    if (place.some((other) => other.cost <= cost && weight(other.cost, other.dislike) <= weight(cost, disliked)))
-      continue;
-    const option: ShapedOption = { cost, dislike: disliked, handMm: shape.handMm, shape };
-    const beaten = (other: ShapedOption) =>
-      cost <= other.cost && weight(cost, disliked) <= weight(other.cost, other.dislike);
-    places[lowestFret] = [...place.filter((other) => !beaten(other)), option];
+    if (!isBeaten(place, cost, disliked)) keepBest(place, { cost, dislike: disliked, handMm: shape.handMm, shape });
   }
   const options = places.flat();
   return options.length > 0 ? options : [unplayable];
+}
+
+function isBeaten(place: readonly HandOption[], cost: number, disliked: number): boolean {
+  for (const other of place)
+    if (other.cost <= cost && weight(other.cost, other.dislike) <= weight(cost, disliked)) return true;
+  return false;
+}
+
+/** Puts an option in the place of all that it beats. */
+function keepBest(place: ShapedOption[], option: ShapedOption): void {
+  const { cost, dislike: disliked } = option;
+  let left = 0;
+  for (const other of place)
+    if (cost > other.cost || weight(cost, disliked) > weight(other.cost, other.dislike)) place[left++] = other;
+  place[left] = option;
+  place.length = left + 1;
 }
 
 /** What of a chord's share of the total hangs on it alone. */

@@ -126,7 +126,13 @@ function search(
 }
 
 /** What a shape is weighed by, whatever the wishes: less is better. */
-type Worth = readonly [bare: number, underCapo: number, barre: number, stopped: number, highest: number];
+interface Worth {
+  bare: number;
+  underCapo: number;
+  barre: number;
+  stopped: number;
+  highest: number;
+}
 
 /** The best shapes at each place of the neck. */
 class Places {
@@ -136,15 +142,19 @@ class Places {
   take(shape: PlayableShape): boolean {
     const worth = worthOf(shape);
     const place = this.best[shape.load.lowestFret]!;
-    if (place.some((other) => noWorse(other, worth))) return false;
-    this.best[shape.load.lowestFret] = [...place.filter((other) => !noWorse(worth, other)), worth];
+    for (const other of place) if (noWorse(other, worth)) return false;
+    let left = 0;
+    for (const other of place) if (!noWorse(worth, other)) place[left++] = other;
+    place[left] = worth;
+    place.length = left + 1;
     return true;
   }
 
   /** Whether a shape that was taken has not been beaten since. */
   holds(shape: PlayableShape): boolean {
     const worth = worthOf(shape);
-    return this.best[shape.load.lowestFret]!.some((other) => other.every((value, k) => value === worth[k]));
+    for (const other of this.best[shape.load.lowestFret]!) if (noWorse(other, worth)) return noWorse(worth, other);
+    return false;
   }
 }
 
@@ -152,9 +162,15 @@ function worthOf({ load, reachMm, highestFret, frets }: PlayableShape): Worth {
   const bare = shapeCost(load, reachMm, 0);
   // Only a barre at the low frets is softer under a capo.
   const underCapo = load.barreStrings === 0 ? bare : shapeCost(load, reachMm, 1);
-  return [bare, underCapo, load.barreStrings, frets.length - load.openStrings, highestFret];
+  return { bare, underCapo, barre: load.barreStrings, stopped: frets.length - load.openStrings, highest: highestFret };
 }
 
 function noWorse(a: Worth, b: Worth): boolean {
-  return a[0] <= b[0] && a[1] <= b[1] && a[2] <= b[2] && a[3] <= b[3] && a[4] <= b[4];
+  return (
+    a.bare <= b.bare &&
+    a.underCapo <= b.underCapo &&
+    a.barre <= b.barre &&
+    a.stopped <= b.stopped &&
+    a.highest <= b.highest
+  );
 }

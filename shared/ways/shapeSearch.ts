@@ -117,6 +117,8 @@ function search(neck: Neck, needs: ChordNeeds, visit: (shape: PlayableShape) => 
   );
   let base = 0;
   let choices: number[][] = [];
+  const tonesAhead = new Int32Array(count + 1);
+  const baseAhead = new Array<boolean>(count + 1).fill(false);
   const walk = (string: number, above: number, long: number, ended: boolean, atBase: boolean, sounded: number) => {
     if (string === count) {
       if (atBase && long >= least && (sounded & needs.needed) === needs.needed)
@@ -124,6 +126,8 @@ function search(neck: Neck, needs: ChordNeeds, visit: (shape: PlayableShape) => 
       return;
     }
     if (long + count - string < least) return;
+    // What the strings still to come cannot bring any more.
+    if ((!atBase && !baseAhead[string]) || ((sounded | tonesAhead[string]!) & needs.needed) !== needs.needed) return;
     if (short[string] || !ended || all) {
       const next = short[string] ? long : long + 1;
       const heard = tones[string]!;
@@ -145,7 +149,12 @@ function search(neck: Neck, needs: ChordNeeds, visit: (shape: PlayableShape) => 
         for (let fret = base; fret <= top; fret++) if (heard[fret] !== 0) options.push(fret);
       return options;
     });
-    if (base === 0 || choices.some((options) => options.includes(base))) walk(0, 0, 0, false, base === 0, 0);
+    for (let string = count - 1; string >= 0; string--) {
+      const options = choices[string]!;
+      tonesAhead[string] = options.reduce((bits, fret) => bits | tones[string]![fret]!, tonesAhead[string + 1]!);
+      baseAhead[string] = baseAhead[string + 1]! || options.includes(base);
+    }
+    walk(0, 0, 0, false, base === 0, 0);
   }
 }
 

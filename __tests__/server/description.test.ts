@@ -83,6 +83,7 @@ it("makes its schemas from the contracts", async () => {
       "MailPreferences",
       "OpenApi",
       "OwnInstrument",
+      "PlayerWishes",
       "Problem",
       "Session",
       "SheetPdfRequest",

@@ -36,7 +36,7 @@ const retunes = [0, -1, -2, -3, -4, 1];
 const highestCapo = 9;
 
 /** Cost of what is done to the instrument, on the scale of one shape's cost. */
-const work = { capoFret: 0.06, capoFretBeyondFive: 0.3, retune: 0.4, retuneSemitone: 0.12, slack: 1.2, tight: 0.8 };
+const work = { capo: 0.1, capoFret: 0.06, capoFretBeyondFive: 0.3, retune: 0.4, retuneSemitone: 0.12, slack: 1.2, tight: 0.8 };
 /** What full dislike adds for each capo fret and each semitone of a retune. */
 const dislike = { capoFret: 0.3, retuneSemitone: 3 };
 
@@ -104,6 +104,7 @@ export function wayCandidates(question: WaysQuestion): WayCandidate[] {
 
 function workOf(retune: number, capo: number, strings: readonly StringChange[]): number {
   return (
+    (capo === 0 ? 0 : work.capo) +
     work.capoFret * capo +
     work.capoFretBeyondFive * Math.max(0, capo - 5) +
     (retune === 0 ? 0 : work.retune + work.retuneSemitone * Math.abs(retune)) +

@@ -7,7 +7,7 @@ import type { SongFlow } from "./songFlow";
 import type { WayPreferences } from "./way";
 
 /** One chord with the fingering it gets in the flow of the song. */
-export interface PlayedChord {
+interface PlayedChord {
   /** name of the shape that the fingers play */
   name: string;
   /** null for what is no chord ("N.C.") */

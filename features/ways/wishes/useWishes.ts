@@ -4,7 +4,7 @@ import { shelf } from "@/features/api/shelf";
 import type { PlayerWishes } from "@/shared/contract/playerWishes";
 import { merged, type Wishes } from "./wishes";
 
-export const wishQueries = {
+const wishQueries = {
   all: () => queryOptions({ queryKey: ["wishes"], queryFn: () => shelf.list("wishes") }),
 };
 

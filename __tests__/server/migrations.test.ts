@@ -15,6 +15,7 @@ const names = [
   "SongVersions1772323200000",
   "KeysPerVoice1775001600000",
   "InstrumentPhotos1778000000000",
+  "PlayerWishes1779000000000",
   "MailAndJobs1782000000000",
 ];
 const applied = () => database.query("SELECT name FROM migrations ORDER BY id");

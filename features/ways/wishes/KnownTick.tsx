@@ -22,7 +22,7 @@ export function KnownTick({ name, frets, known, onKnown }: KnownTickProps) {
   return (
     <Pressable
       role="button"
-      aria-label={`I know this shape of ${glyphs(name)}`}
+      aria-label={`I know it: this shape of ${glyphs(name)}`}
       onPress={() => onKnown(mark, !on)}
       {...webProps({ "aria-pressed": on })}
       style={{

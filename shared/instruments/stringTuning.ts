@@ -2,7 +2,7 @@ import type { Instrument, InstrumentString } from "./instrument";
 import { retuneVerdict, stringMidi, type RetuneVerdict } from "./tension";
 
 /** One string on its way to another pitch. Pitches are MIDI numbers. */
-export interface TuningString {
+interface TuningString {
   /** place among the instrument's strings */
   index: number;
   fromMidi: number;

@@ -1,6 +1,7 @@
 import Svg, { G, Line, Rect } from "react-native-svg";
 import { SvgLabel } from "@/features/ui/SvgLabel";
 import { colors } from "@/features/ui/theme";
+import { median } from "@/shared/signal/median";
 import { inTuneCents } from "./tunerState";
 
 export interface TiltPictureProps {
@@ -21,14 +22,14 @@ const shownS = 2.4;
 const barS = 0.3;
 
 /** Height of so many cents off: the first few take up as much as the last hundred. */
-export function tiltY(cents: number, height: number): number {
+function tiltY(cents: number, height: number): number {
   const scale = Math.asinh(edgeCents / 8);
   const share = Math.max(-1, Math.min(1, Math.asinh(cents / 8) / scale));
   return height / 2 - share * (height / 2 - 22);
 }
 
 /** As bars of the pitch trail lean: 0.4 degrees a cent, 14 at most, up where it is high. */
-export function tiltLean(cents: number): number {
+function tiltLean(cents: number): number {
   return -Math.max(-14, Math.min(14, cents * 0.4));
 }
 
@@ -117,8 +118,5 @@ function barsOf(trail: readonly { t: number; cents: number }[], now: number) {
     bar.cents.push(cents);
     bars.set(key, bar);
   }
-  return [...bars].map(([key, { t, cents }]) => {
-    cents.sort((a, b) => a - b);
-    return { t, cents: cents[cents.length >> 1] ?? 0, newest: key === 0 };
-  });
+  return [...bars].map(([key, { t, cents }]) => ({ t, cents: median(cents), newest: key === 0 }));
 }

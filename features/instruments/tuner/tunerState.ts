@@ -3,7 +3,7 @@ import { identifyString, type StringPlace, type TuningPlan } from "@/shared/inst
 import type { StringReading } from "@/shared/voice/pluckedString";
 
 /** Strings one by one; all again with the capo; all once more, because a neck settles. */
-export type TunerPass = "strings" | "capo" | "check" | "done";
+type TunerPass = "strings" | "capo" | "check" | "done";
 
 /** What was heard last. */
 export interface HeardString {
@@ -48,7 +48,7 @@ export type TunerEvent =
 
 export const inTuneCents = 3;
 const letGoCents = 6;
-export const holdS = 1;
+const holdS = 1;
 /** A hard pluck is sharp at first. */
 const settledS = 0.3;
 const goesOn = 1.6;

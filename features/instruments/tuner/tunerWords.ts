@@ -10,13 +10,13 @@ export function pitchWords(instrument: Instrument, index: number, midi: number):
   return spelled(midi, instrument.strings[index]?.note ?? "");
 }
 
-/** "String 2 (D4)": numbered as they lie in playing order, with the note they have now. */
+/** "D4 string": called by the note it has now. */
 export function stringName(instrument: Instrument, index: number): string {
   return `${glyphs(instrument.strings[index]?.note ?? "")} string`;
 }
 
 /** "12 cents low", "1.4 semitones high", "In tune". */
-export function offWords(cents: number): string {
+function offWords(cents: number): string {
   const whole = Math.round(Math.abs(cents));
   if (Math.abs(cents) <= inTuneCents) return "In tune";
   const way = cents < 0 ? "low" : "high";
@@ -24,7 +24,7 @@ export function offWords(cents: number): string {
 }
 
 /** What to do about it. */
-export function turnWords(cents: number): string {
+function turnWords(cents: number): string {
   const off = Math.abs(cents);
   if (off <= inTuneCents) return "Let it ring.";
   if (cents < 0) return off < 20 ? "Turn the peg up a little." : off < 100 ? "Turn the peg up." : "Bring it up slowly.";

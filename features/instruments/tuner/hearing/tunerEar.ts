@@ -1,5 +1,5 @@
 /** What a page that listens may be told. */
-export type TunerEarEvent = { kind: "interrupted"; cause: string } | { kind: "unavailable"; why: string };
+type TunerEarEvent = { kind: "interrupted"; cause: string } | { kind: "unavailable"; why: string };
 
 /** The microphone as the page is given it: one at a time, opened, listened to and let go. */
 export interface TunerEar {

@@ -16,6 +16,7 @@ import { requestLog } from "./http/requestLog";
 import { securityHeaders } from "./http/securityHeaders";
 import { instrumentsRoutes } from "./instruments/instruments.router";
 import { keysRoutes } from "./keys/keys.router";
+import { sharedPages, sheetsRoutes } from "./sheets/sheets.router";
 import { songsRoutes } from "./songs/songs.router";
 import type { FakeSmtp } from "./mail/inbox/fakeSmtp";
 import { inboxPage } from "./mail/inbox/inboxPage";
@@ -45,6 +46,7 @@ export function createApp(dataSource: DataSource, logger: Logger, settings: AppS
   playerWishesRoutes(api, dataSource);
   chartsRoutes(api, dataSource);
   mailRoutes(api, dataSource, settings);
+  sheetsRoutes(api, dataSource);
   healthRoutes(api, dataSource);
   descriptionRoutes(api);
 
@@ -61,6 +63,7 @@ export function createApp(dataSource: DataSource, logger: Logger, settings: AppS
     unknownRoute(api),
   );
   if (settings.fakeSmtp) app.use("/dev/inbox", inboxPage(settings.fakeSmtp));
+  app.use("/shared", sharedPages(dataSource));
   app.use(clientFiles(settings.staticDir));
   app.use(errorHandler);
   return { app, api };

@@ -128,3 +128,49 @@ it("lets one address print sixty in a minute, and then says how long to wait", a
   expect(answer.body.code).toBe("too-many-tries");
   expect(Number(answer.headers["retry-after"])).toBeGreaterThan(0);
 });
+
+const sheet = {
+  ...{ title: "Gulls in B♭", facts: "", chart, singer: "Maren", firstNote: "F4", strokes: null },
+  from: { tonic: "Bb", mode: "minor" },
+  key: { tonic: "C", mode: "minor" },
+  instrument: {
+    ...{ name: "Box guitar", strings: ["A3", "D4", "F#4"], tuned: ["A3", "D4", "F#4"] },
+    ...{ fretNames: null, leftHanded: false, retune: 0, capo: 3, shapeKey: { tonic: "A", mode: "minor" } },
+  },
+  chords: [
+    {
+      ...{ written: "Bb", sounding: "C", played: "A" },
+      shape: { frets: [0, null, 3], fingers: [0, 0, 3], barre: null, reachMm: 20, ease: 0.5, roots: [0] },
+    },
+  ],
+};
+const options = { paper: "A4", grids: "side", numbers: true, letters: "usual", shows: "played", leftHanded: true };
+
+it("sets a sheet as the layout has it: capo, shapes, what is heard and the grid, open to everybody", async () => {
+  const answer = await request(server.app)
+    .post("/api/sheets/pdf")
+    .send({ sheet, options })
+    .buffer(true)
+    .parse(bytesOf)
+    .expect(200)
+    .expect("Content-Type", "application/pdf");
+  const pages = pagesOf(answer.body as Buffer);
+  expect(pages).toHaveLength(1);
+  const said = pages[0]!.replaceAll("|", "");
+  for (const part of ["Capo 3", "for Maren", "A-D-F♯", "Chorus", "low água and a rope", "sounds C", "F4 is sung first"])
+    expect(said).toContain(part);
+});
+
+it.each([
+  [{ sheet: { ...sheet, key: { tonic: "H", mode: "minor" } }, options }, "sheet.key.tonic"],
+  [{ sheet, options: { ...options, paper: "A5" } }, "options.paper"],
+  [{ sheet: { ...sheet, chords: [{ ...sheet.chords[0], shape: { frets: [99] } }] }, options }, "sheet.chords.0"],
+])("names what of a sheet does not fit", async (body, path) => {
+  const answer = await request(server.app).post("/api/sheets/pdf").send(body).expect(422);
+  expect(answer.body.fields[0].path.startsWith(path)).toBe(true);
+});
+
+it("refuses a sheet that would fill a book", async () => {
+  const long = { ...sheet, chart: "G\n".repeat(40_000) };
+  await request(server.app).post("/api/sheets/pdf").send({ sheet: long, options }).expect(422);
+});

@@ -16,6 +16,7 @@ const names = [
   "KeysPerVoice1775001600000",
   "InstrumentPhotos1778000000000",
   "PlayerWishes1779000000000",
+  "SheetLinks1780000000000",
   "MailAndJobs1782000000000",
 ];
 const applied = () => database.query("SELECT name FROM migrations ORDER BY id");

@@ -90,6 +90,16 @@ export function SongScreen({
           alignItems: "flex-start",
         }}
       >
+        {!wide && target?.decided !== true && (
+          <LinkButton
+            kind="text"
+            small
+            icon="file"
+            label="Make the sheet"
+            href={{ pathname: "/songs/[id]/sheet", params }}
+            testID="to-sheet"
+          />
+        )}
         {!wide && (
           <LinkButton
             kind="text"
@@ -240,6 +250,13 @@ function WideActions({ id, use }: { id: string; use: ReactNode }) {
         label="Edit"
         href={{ pathname: "/songs/[id]/edit", params: { id } }}
         testID="edit-song"
+      />
+      <LinkButton
+        kind="secondary"
+        small
+        label="Sheet"
+        href={{ pathname: "/songs/[id]/sheet", params: { id } }}
+        testID="to-sheet"
       />
       {use}
     </>

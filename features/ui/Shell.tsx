@@ -20,6 +20,7 @@ export function Shell({ initial = null, children }: ShellProps) {
   const pathname = usePathname();
   const layout = useLayout();
   const [barHidden, setBarHidden] = useState(false);
+  const [stage, setStage] = useState(false);
   const [said, setSaid] = useState("");
   const lastPath = useRef<string | null>(null);
   /** this page was come to from another one */
@@ -43,7 +44,7 @@ export function Shell({ initial = null, children }: ShellProps) {
     [pathname],
   );
   const state = useMemo<ShellState>(
-    () => ({ pathname, initial, barHidden, setBarHidden, arrive }),
+    () => ({ pathname, initial, barHidden, setBarHidden, setStage, arrive }),
     [pathname, initial, barHidden, arrive],
   );
   const phone = layout === "phone";
@@ -59,11 +60,11 @@ export function Shell({ initial = null, children }: ShellProps) {
           webStyle({ minHeight: "100dvh" }),
         ]}
       >
-        {!phone && <Rail wide={layout === "wide"} />}
+        {!phone && !stage && <Rail wide={layout === "wide"} />}
         <View style={{ flexGrow: 1, flexShrink: 1, flexBasis: phone ? "auto" : 0, minWidth: 0 }}>
           <MissingChunkBoundary path={pathname}>{children}</MissingChunkBoundary>
         </View>
-        {phone && !barHidden && <BottomBar />}
+        {phone && !barHidden && !stage && <BottomBar />}
       </View>
       <LiveText hidden>{said}</LiveText>
     </ShellContext.Provider>

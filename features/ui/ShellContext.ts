@@ -6,6 +6,8 @@ export interface ShellState {
   initial: string | null;
   barHidden: boolean;
   setBarHidden: (hidden: boolean) => void;
+  /** on stage nothing surrounds the page: neither bar nor rail */
+  setStage: (on: boolean) => void;
   /** a screen has come: moves the focus to its heading and says its title, but not on the first page of a visit */
   arrive: (title: string, heading: HTMLElement | null) => void;
 }
@@ -15,6 +17,7 @@ export const ShellContext = createContext<ShellState>({
   initial: null,
   barHidden: false,
   setBarHidden: () => undefined,
+  setStage: () => undefined,
   arrive: () => undefined,
 });
 

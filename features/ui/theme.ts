@@ -73,6 +73,13 @@ function properties(scheme: Scheme): string {
   return `${plain};--band:${band};color-scheme:${scheme === "morning" ? "light" : "dark"}`;
 }
 
+/** The colours of one scheme for a part of a page, such as the stage, which is dark at any hour. */
+export function schemeStyle(scheme: Scheme): Record<string, string> {
+  const plain = Object.fromEntries(names.map((name) => [`--${name}`, tokens[scheme][name]]));
+  const mixed = derived.split(";").map((rule) => rule.trim().split(/:(.*)/s, 2) as [string, string]);
+  return { ...plain, ...Object.fromEntries(mixed), colorScheme: scheme === "morning" ? "light" : "dark" };
+}
+
 const derived = `--soft:color-mix(in srgb,var(--plum) 8%,var(--card));
 --tint:color-mix(in srgb,var(--lagoon) 10%,var(--card));
 --warm:color-mix(in srgb,var(--honey) 12%,var(--card));

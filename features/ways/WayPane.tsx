@@ -1,3 +1,4 @@
+import type { Href } from "expo-router";
 import { useState, type ReactNode } from "react";
 import { Button } from "@/features/ui/Button";
 import { EmptyState } from "@/features/ui/EmptyState";
@@ -40,6 +41,8 @@ export interface WayPaneProps {
   /** all ways in full, the different ones beside each other where there is room, with ticks for the shapes one knows */
   full?: boolean;
   ticks?: ShapeTicks | undefined;
+  /** where the chosen way stands on paper */
+  sheet?: (way: Way) => Href;
   /** where the ways stand, and where the button that takes one */
   children: (parts: { list: ReactNode; use: ReactNode }) => ReactNode;
 }
@@ -58,6 +61,7 @@ export function WayPane({
   most,
   full = false,
   ticks,
+  sheet,
   children,
 }: WayPaneProps) {
   const [chosen, setChosen] = useState<string | null>(null);
@@ -133,13 +137,16 @@ export function WayPane({
       />
     ),
     use: (
-      <Button
-        label={isKept ? label.replace("Use", "You use") : label}
-        busy={saving}
-        disabled={isKept}
-        onPress={() => onUse(way)}
-        testID="use-way"
-      />
+      <>
+        {sheet && <LinkButton kind="secondary" label="Make the sheet" href={sheet(way)} testID="to-sheet" />}
+        <Button
+          label={isKept ? label.replace("Use", "You use") : label}
+          busy={saving}
+          disabled={isKept}
+          onPress={() => onUse(way)}
+          testID="use-way"
+        />
+      </>
     ),
   });
 }

@@ -69,15 +69,11 @@ export class PrintedText {
     for (const { text, x, y, size, music } of runs) {
       const shown = music ? text : this.printable(text, face);
       if (shown.trim() === "") continue;
-      const { document } = this;
-      document
+      this.document
         .font(music ? "music" : face)
         .fontSize(size)
-        .fillColor(color);
-      // The music font has one weight; a thin outline brings it nearer to letters in bold.
-      const bold = music && face !== "mono" && face !== "text";
-      if (bold) document.lineWidth(size * 0.03).strokeColor(color);
-      document.text(shown, x, y, { lineBreak: false, baseline: "alphabetic", fill: true, stroke: bold });
+        .fillColor(color)
+        .text(shown, x, y, { lineBreak: false, baseline: "alphabetic" });
     }
   }
 

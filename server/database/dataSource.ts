@@ -4,6 +4,7 @@ import { UserEntity } from "../auth/user.entity";
 import { InstrumentEntity } from "../instruments/instrument.entity";
 import { DecisionEntity } from "../keys/decision.entity";
 import { TryEntity } from "../keys/try.entity";
+import { SheetLinkEntity } from "../sheets/sheetLink.entity";
 import { SongEntity } from "../songs/song.entity";
 import { TakeEntity } from "../voices/take.entity";
 import { VoiceEntity } from "../voices/voice.entity";
@@ -14,6 +15,7 @@ import { KeysPerVoice1775001600000 } from "./migrations/KeysPerVoice177500160000
 import { KindOfTake1767225600000 } from "./migrations/KindOfTake1767225600000";
 import { MailAndJobs1782000000000 } from "./migrations/MailAndJobs1782000000000";
 import { PlayerWishes1779000000000 } from "./migrations/PlayerWishes1779000000000";
+import { SheetLinks1780000000000 } from "./migrations/SheetLinks1780000000000";
 import { SongRevisions1769904000000 } from "./migrations/SongRevisions1769904000000";
 import { SongVersions1772323200000 } from "./migrations/SongVersions1772323200000";
 
@@ -31,6 +33,7 @@ const common: Pick<
     TryEntity,
     InstrumentEntity,
     PlayerWishesEntity,
+    SheetLinkEntity,
   ],
   synchronize: false,
   uuidExtension: "pgcrypto",
@@ -73,6 +76,7 @@ export function createMigrationSource(url: string): DataSource {
       InstrumentPhotos1778000000000,
       PlayerWishes1779000000000,
       MailAndJobs1782000000000,
+      SheetLinks1780000000000,
     ],
     migrationsTransactionMode: "all",
   });

@@ -28,7 +28,7 @@ export function clientFiles(directory: string): RequestHandler[] {
     const index = path.join(root, "index.html");
     if (!existsSync(index)) {
       res
-        .status(status === 404 ? 404 : 503)
+        .status(status === 200 ? 503 : status)
         .type("html")
         .send(notBuilt);
       return;
@@ -67,7 +67,7 @@ export function clientFiles(directory: string): RequestHandler[] {
       if (req.method !== "GET" && req.method !== "HEAD") {
         res.status(405).set("Allow", "GET, HEAD").type("text").send("Only GET and HEAD.\n");
       } else if (isClientRoute(req.path)) {
-        page(req, res, 200);
+        page(req, res, statusFor(res));
       } else if (path.extname(req.path) !== "") {
         res.status(404).type("text").send("There is no such file.\n");
       } else {
@@ -75,6 +75,12 @@ export function clientFiles(directory: string): RequestHandler[] {
       }
     },
   ];
+}
+
+/** 200, unless who knows more of the page has said otherwise. */
+function statusFor(res: Response): number {
+  const told: unknown = res.locals.pageStatus;
+  return typeof told === "number" ? told : 200;
 }
 
 /** The file an address names, if it is one inside the directory. */

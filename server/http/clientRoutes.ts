@@ -1,4 +1,4 @@
-/** The addresses that the web client knows; every other page answers 404. ":id" stands for an id. */
+/** The addresses that the web client knows; every other page answers 404. ":id" stands for an id, ":token" for the secret of a link. */
 export const clientRoutes = [
   "/",
   "/voice",
@@ -19,6 +19,10 @@ export const clientRoutes = [
   "/songs/:id/melody",
   "/songs/:id/recording",
   "/songs/:id/try",
+  "/songs/:id/sheet",
+  "/songs/:id/stage",
+  "/shared/:token",
+  "/shared/:token/stage",
   "/instruments",
   "/instruments/tune",
   "/instruments/new",
@@ -31,7 +35,11 @@ export const clientRoutes = [
 ] as const;
 
 const id = "[0-9a-fA-F]{8}(?:-[0-9a-fA-F]{4}){3}-[0-9a-fA-F]{12}";
-const patterns = clientRoutes.map((route) => new RegExp(`^${route.replaceAll(":id", id)}/?$`));
+/** What cannot be a link gets the same page, which then says so. */
+const token = "[^/]{1,200}";
+const patterns = clientRoutes.map(
+  (route) => new RegExp(`^${route.replaceAll(":id", id).replaceAll(":token", token)}/?$`),
+);
 
 export function isClientRoute(path: string): boolean {
   return patterns.some((pattern) => pattern.test(path));

@@ -97,7 +97,12 @@ export function openApiDocument(operations: readonly Operation[]): OpenApiDocume
 
 function pathParameters({ path }: Operation): Json[] {
   const names = [...path.matchAll(/:(\w+)/g)].map(([, name]) => name);
-  return names.map((name) => ({ name, in: "path", required: true, schema: { type: "string", format: "uuid" } }));
+  return names.map((name) => ({
+    name,
+    in: "path",
+    required: true,
+    schema: { type: "string", ...(name === "token" ? {} : { format: "uuid" }) },
+  }));
 }
 
 function queryParameters({ query }: Operation): Json[] {

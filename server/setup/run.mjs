@@ -48,7 +48,15 @@ const commands = {
     if (ensureDebianPackages(["chromium"], say).length > 0 && !fs.existsSync("/usr/bin/chromium")) {
       throw new Error("The browser journeys need Debian's package chromium: sudo apt-get install chromium");
     }
-    const instruments = ["fluidsynth", "fluid-soundfont-gm", "espeak-ng", "ffmpeg", "abcmidi", "abcm2ps"];
+    const instruments = [
+      "fluidsynth",
+      "fluid-soundfont-gm",
+      "espeak-ng",
+      "ffmpeg",
+      "abcmidi",
+      "abcm2ps",
+      "poppler-utils",
+    ];
     const absent = ensureDebianPackages(instruments, say);
     if (absent.length > 0) say(`Not to be had here, so the tests that need them do not run: ${absent.join(", ")}`);
     const cluster = await ensureCluster({ root, ...CLUSTERS.test });

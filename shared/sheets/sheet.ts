@@ -14,7 +14,7 @@ export interface SheetChord {
 }
 
 /** One thing that the right hand does in a bar. */
-export interface SheetStroke {
+interface SheetStroke {
   /** quarter notes from the start of the bar */
   at: number;
   kind: "down" | "up" | "pluck" | "bass";

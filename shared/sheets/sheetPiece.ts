@@ -37,7 +37,7 @@ export interface SheetLine {
 }
 
 /** A filled box with round corners. */
-export interface SheetBox {
+interface SheetBox {
   kind: "box";
   x: number;
   y: number;

@@ -7,6 +7,7 @@ import { useInstrument, useInstrumentNames } from "@/features/instruments/useIns
 import { DecisionCard } from "@/features/keys/decision/DecisionCard";
 import { askedKey } from "@/features/keys/songKeys";
 import { decidedHere, useSongKeys } from "@/features/keys/useSongKeys";
+import { wayParams } from "@/features/sheets/sheetInHand";
 import { MovedChart } from "@/features/songs/MovedChart";
 import { SongState } from "@/features/songs/SongState";
 import { songQueries } from "@/features/songs/songQueries";
@@ -51,6 +52,10 @@ function Ways({ song }: { song: Song }) {
       full
       ticks={ticking ? ticksOn(instrument, wishes, keepWishes) : undefined}
       onUse={(way) => keys.take({ tonic: key.tonic, shift, instrument: instrument.id, way }, settle)}
+      sheet={(way) => ({
+        pathname: "/songs/[id]/sheet",
+        params: { id: song.id, key: key.tonic, shift, instrument: instrument.id, ...wayParams(way) },
+      })}
     >
       {(parts) => (
         <WaysScreen

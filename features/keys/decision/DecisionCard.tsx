@@ -1,8 +1,10 @@
+import type { Href } from "expo-router";
 import { useEffect, useRef, useState } from "react";
 import { View, type StyleProp, type ViewStyle } from "react-native";
 import { Button } from "@/features/ui/Button";
 import { Card } from "@/features/ui/Card";
 import { KeySign } from "@/features/ui/KeySign";
+import { LinkButton } from "@/features/ui/LinkButton";
 import { Text } from "@/features/ui/Text";
 import { webProps } from "@/features/ui/webStyle";
 import type { SongKeys } from "../useSongKeys";
@@ -10,11 +12,13 @@ import { PastChoices } from "./PastChoices";
 
 export interface DecisionCardProps {
   keys: Pick<SongKeys, "decided" | "saving" | "undo" | "history" | "remove" | "removed" | "restore" | "again">;
+  /** where the decided key stands on paper */
+  sheet?: Href;
   style?: StyleProp<ViewStyle>;
 }
 
 /** The decided key: which, for whom, since when, why and how it is played; what was decided before, and the ways back. */
-export function DecisionCard({ keys, style }: DecisionCardProps) {
+export function DecisionCard({ keys, sheet, style }: DecisionCardProps) {
   const { decided, saving, history, removed } = keys;
   const [open, setOpen] = useState(false);
   const wasRemoved = useRef(removed);
@@ -73,6 +77,9 @@ export function DecisionCard({ keys, style }: DecisionCardProps) {
                 onPress={keys.undo}
                 testID="undo-key"
               />
+            )}
+            {sheet && (
+              <LinkButton kind="text" small icon="file" label="Make the sheet" href={sheet} testID="decided-sheet" />
             )}
             <Button
               kind="text"

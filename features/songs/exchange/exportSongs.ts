@@ -1,7 +1,7 @@
+import { differing, fileStem } from "@/features/api/fileStem";
+import { printedPdf } from "@/features/api/printedPdf";
 import type { Song } from "@/shared/contract/song";
 import { songText } from "@/shared/songs/songExport";
-import { chartPdf } from "./chartPdf";
-import { differing, fileStem } from "./fileStem";
 import { writeSongsFile } from "./songsFile";
 
 export type ExportFormat = "text" | "pdf" | "json";
@@ -24,6 +24,11 @@ export interface ExportOptions {
   onProgress?: (done: number) => void;
 }
 
+function chartPage({ title, chart, writtenKey }: Song, signal: AbortSignal): Promise<Blob> {
+  const key = writtenKey ? { key: writtenKey } : null;
+  return printedPdf("/charts/pdf", { title, chart, ...key, paper: "A4" }, signal);
+}
+
 const extensions = { text: "txt", pdf: "pdf" } as const;
 
 /**
@@ -43,7 +48,7 @@ export async function exportSongs(
   const files: Blob[] = [];
   for (const song of songs) {
     signal.throwIfAborted();
-    files.push(format === "text" ? textOf(song) : await chartPdf(song, signal));
+    files.push(format === "text" ? textOf(song) : await chartPage(song, signal));
     onProgress?.(files.length);
   }
   const extension = extensions[format];

@@ -1,8 +1,8 @@
 import { useCallback, useEffect, useRef, useState } from "react";
+import { saveFile } from "@/features/api/saveFile";
 import { shelf } from "@/features/api/shelf";
 import type { Song } from "@/shared/contract/song";
 import { exportSongs, type ExportFormat } from "./exportSongs";
-import { saveFile } from "./saveFile";
 
 export interface ExportState {
   status: "idle" | "working" | "done" | "failed";

@@ -1,13 +1,11 @@
-import { ApiError } from "@/features/api/apiError";
-import type { Song } from "@/shared/contract/song";
+import { ApiError } from "./apiError";
 
 const mostWaits = 20;
 
-/** A song's chart as a page to print. Where too many are asked for at once, it waits its turn. */
-export async function chartPdf(song: Pick<Song, "title" | "chart" | "writtenKey">, signal: AbortSignal): Promise<Blob> {
-  const { title, chart, writtenKey } = song;
+/** What the server prints, "/charts/pdf" or "/sheets/pdf". Where too many are asked for at once, it waits its turn. */
+export async function printedPdf(path: string, body: object, signal: AbortSignal): Promise<Blob> {
   for (let waits = 0; ; waits += 1) {
-    const answer = await ask({ title, chart, ...(writtenKey ? { key: writtenKey } : null), paper: "A4" }, signal);
+    const answer = await ask(path, body, signal);
     if (answer.ok) return answer.blob();
     if (answer.status !== 429 || waits >= mostWaits) throw await problemOf(answer);
     const seconds = Math.min(60, Math.max(1, Number(answer.headers.get("Retry-After")) || 2));
@@ -15,9 +13,9 @@ export async function chartPdf(song: Pick<Song, "title" | "chart" | "writtenKey"
   }
 }
 
-async function ask(body: object, signal: AbortSignal): Promise<Response> {
+async function ask(path: string, body: object, signal: AbortSignal): Promise<Response> {
   try {
-    return await fetch("/api/charts/pdf", {
+    return await fetch(`/api${path}`, {
       method: "POST",
       headers: { "Content-Type": "application/json", Accept: "application/pdf, application/json" },
       credentials: "same-origin",

@@ -1,7 +1,5 @@
-import type { ExportedFile } from "./exportSongs";
-
 /** Hands a file to the browser to be saved. */
-export function saveFile({ name, blob }: ExportedFile): void {
+export function saveFile({ name, blob }: { name: string; blob: Blob }): void {
   const link = document.createElement("a");
   link.href = URL.createObjectURL(blob);
   link.download = name;

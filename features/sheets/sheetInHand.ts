@@ -1,0 +1,120 @@
+import type { SharedSheet } from "@/shared/contract/sheetLink";
+import type { Song } from "@/shared/contract/song";
+import { fretName } from "@/shared/instruments/frets";
+import type { Instrument } from "@/shared/instruments/instrument";
+import { keyFifths, type KeyName } from "@/shared/music/keyName";
+import { keySign, movedKey } from "@/shared/music/keyWords";
+import { shortMove } from "@/shared/music/moveWords";
+import { glyphs, noteName } from "@/shared/music/pitch";
+import type { Sheet } from "@/shared/sheets/sheet";
+import { chartChords, parseChart } from "@/shared/songs/chart";
+import type { Way } from "@/shared/ways/way";
+
+type Moves = Pick<Way, "retune" | "capo" | "shapeKey">;
+
+/** What an address may ask for. All of it as it stands there. */
+export interface SheetParams {
+  key?: string;
+  shift?: string;
+  instrument?: string;
+  retune?: string;
+  capo?: string;
+  shapes?: string;
+}
+
+/** An address's part for a way of playing. */
+export function wayParams({ retune, capo, shapeKey }: Moves) {
+  return { retune: String(retune), capo: String(capo), shapes: shapeKey };
+}
+
+/** The way that the address asks for, else the one kept with the decision, else the best; null where there is none. */
+export function chosenWay(ways: readonly Way[], asked: SheetParams, kept: Moves | null): Way | null {
+  const is = (want: Moves) => (way: Way) =>
+    way.retune === want.retune && way.capo === want.capo && way.shapeKey === want.shapeKey;
+  const { retune, capo, shapes } = asked;
+  const wanted =
+    retune !== undefined && capo !== undefined && shapes !== undefined
+      ? ways.find(is({ retune: Number(retune), capo: Number(capo), shapeKey: shapes }))
+      : undefined;
+  return wanted ?? (kept ? ways.find(is(kept)) : undefined) ?? ways[0] ?? null;
+}
+
+/** All twelve keys, each as near as may be to the one that the sheet began with. */
+export function keyChoices(written: KeyName, around: number): { shift: number; key: KeyName; label: string }[] {
+  return Array.from({ length: 12 }, (_, k) => {
+    const shift = around - 5 + k;
+    const key = movedKey(written, shift);
+    return { shift, key, label: `${glyphs(keySign(key))}, ${shortMove(shift)}` };
+  });
+}
+
+/** What a sheet is made from. */
+export interface SheetParts {
+  song: Song;
+  /** null where the song has no key */
+  key: KeyName | null;
+  shift: number;
+  singer: string | null;
+  instrument: Instrument;
+  /** null while ways are searched, and where there are none */
+  way: Way | null;
+}
+
+/** Everything that stands on the paper. */
+export function sheetOf({ song, key, shift, singer, instrument, way }: SheetParts): Sheet {
+  const from = key && writtenKey(song);
+  const first = song.tune?.kind === "melody" ? song.tune.notes[0] : undefined;
+  const strings = instrument.strings.map(({ note }) => note);
+  return {
+    title: song.title,
+    facts: factsOf(song),
+    chart: song.chart,
+    from,
+    key,
+    singer: singer !== null && /^(my|your) voice$/i.test(singer.trim()) ? null : singer,
+    firstNote: first && key ? noteName(Math.round(first.midi) + shift, keyFifths(key) < 0 ? "flats" : "sharps") : null,
+    instrument: way &&
+      key && {
+        name: instrument.name,
+        strings,
+        tuned: strings.map((note, index) => way.strings[index]?.to ?? note),
+        fretNames: instrument.fretMap
+          ? Array.from({ length: instrument.frets + 1 }, (_, fret) => fretName(instrument, fret))
+          : null,
+        leftHanded: instrument.leftHanded,
+        retune: way.retune,
+        capo: way.capo,
+        shapeKey: { tonic: way.shapeKey, mode: key.mode },
+      },
+    chords: way ? way.chords.map(({ written, sounding, played, shape }) => ({ written, sounding, played, shape })) : [],
+    strokes: null,
+  };
+}
+
+/** The key that the chart is in; the tune's home note where there is no key. */
+export function writtenKey({ writtenKey: key, tune }: Pick<Song, "writtenKey" | "tune">): KeyName | null {
+  return key ?? (tune && { tonic: tune.home, mode: "major" });
+}
+
+/** A song's chords and its key; null where it lacks either. */
+export function chordsOf(song: Song): { chords: string[]; from: KeyName } | null {
+  const from = writtenKey(song);
+  const chords = chartChords(parseChart(song.chart));
+  return from && chords.length > 0 ? { chords, from } : null;
+}
+
+function factsOf({ beatsPerBar, tempo }: Pick<Song, "beatsPerBar" | "tempo">): string {
+  const beats = beatsPerBar === null ? [] : [`${beatsPerBar} ${beatsPerBar === 1 ? "beat" : "beats"} in a bar`];
+  return [...beats, ...(tempo === null ? [] : [`${tempo} a minute`])].join(", ");
+}
+
+/** The song of a link, for whoever has it: it is on nobody's shelf. */
+export function sharedSong({ title, chart, writtenKey: key, beatsPerBar, tempo }: SharedSheet): Song {
+  return {
+    id: "00000000-0000-4000-8000-000000000000",
+    ...{ title, chart, writtenKey: key, beatsPerBar, tempo },
+    ...{ tune: null, demo: null, tags: [], archivedAt: null, playedAt: null },
+    createdAt: "2000-01-01T00:00:00.000Z",
+    revision: 0,
+  };
+}

@@ -54,6 +54,7 @@ module.exports = {
     layer("keys", "signal", "music", "voice", "songs"),
     layer("instruments", "signal", "music"),
     layer("ways", "signal", "music", "voice", "songs", "keys", "instruments"),
+    layer("coach", "signal", "music", "voice", "songs", "keys", "instruments", "ways"),
     layer("sheets", "signal", "music", "voice", "songs", "keys", "instruments", "ways"),
     only("ui-sees-shared", "The kit of parts knows no feature.", "^features/ui/", "^(features/ui|shared)/"),
     only("api-sees-shared", "The client's way to the server knows no feature.", "^features/api/", "^(features/api|shared)/"),

@@ -17,6 +17,7 @@ import { securityHeaders } from "./http/securityHeaders";
 import { instrumentsRoutes } from "./instruments/instruments.router";
 import { keysRoutes } from "./keys/keys.router";
 import { sharedPages, sheetsRoutes } from "./sheets/sheets.router";
+import { lineUpsRoutes } from "./lineUps/lineUps.router";
 import { songsRoutes } from "./songs/songs.router";
 import type { FakeSmtp } from "./mail/inbox/fakeSmtp";
 import { inboxPage } from "./mail/inbox/inboxPage";
@@ -44,6 +45,7 @@ export function createApp(dataSource: DataSource, logger: Logger, settings: AppS
   keysRoutes(api, dataSource);
   instrumentsRoutes(api, dataSource);
   playerWishesRoutes(api, dataSource);
+  lineUpsRoutes(api, dataSource);
   chartsRoutes(api, dataSource);
   mailRoutes(api, dataSource, settings);
   sheetsRoutes(api, dataSource);

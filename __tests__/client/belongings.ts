@@ -1,5 +1,6 @@
 import type { Decision } from "@/shared/contract/decision";
 import type { OwnInstrument } from "@/shared/contract/instrument";
+import type { LineUp } from "@/shared/contract/lineUp";
 import type { Song } from "@/shared/contract/song";
 import type { Take } from "@/shared/contract/take";
 import type { Try } from "@/shared/contract/try";
@@ -95,5 +96,13 @@ export const aTry = (songId: string, voiceId: string | null, change: Partial<Try
   sungAt: when,
   effort: 2,
   measures: null,
+  ...change,
+});
+
+export const aLineUp = (songId: string, change: Partial<LineUp> = {}): LineUp => ({
+  id: nextId(),
+  songId,
+  players: [{ id: nextId(), name: "Tede", instrument: "whistle-D", way: null }],
+  changedAt: when,
   ...change,
 });

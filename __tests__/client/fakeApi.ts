@@ -2,6 +2,7 @@ import { signInRequest, signUpRequest } from "@/shared/contract/account";
 import { decision } from "@/shared/contract/decision";
 import { ownInstrument } from "@/shared/contract/instrument";
 import { playerWishes } from "@/shared/contract/playerWishes";
+import { lineUp } from "@/shared/contract/lineUp";
 import { pageOfSongs, tagsOfSongs } from "@/features/api/deviceSongs";
 import type { SongQuestion } from "@/features/api/songQuestion";
 import { song, type Song } from "@/shared/contract/song";
@@ -34,6 +35,7 @@ const schemas = {
   tries: songTry,
   instruments: ownInstrument,
   wishes: playerWishes,
+  "line-ups": lineUp,
 };
 type Name = keyof typeof schemas;
 
@@ -57,6 +59,7 @@ export class FakeApi {
     tries: new Map(),
     instruments: new Map(),
     wishes: new Map(),
+    "line-ups": new Map(),
   };
   /** Earlier states of songs, by their id, newest first. Each change keeps the state before: nobody pauses here. */
   readonly versions = new Map<string, SongVersion[]>();

@@ -2,6 +2,7 @@ import { randomUUID } from "node:crypto";
 import type { Decision } from "../../shared/contract/decision";
 import type { OwnInstrument } from "../../shared/contract/instrument";
 import type { PlayerWishes } from "../../shared/contract/playerWishes";
+import type { LineUp } from "../../shared/contract/lineUp";
 import type { Song } from "../../shared/contract/song";
 import type { Take } from "../../shared/contract/take";
 import type { Try } from "../../shared/contract/try";
@@ -135,6 +136,24 @@ export function someWishes(changes: Partial<PlayerWishes> = {}): PlayerWishes {
     keepRinging: false,
     highestCapo: 5,
     known: [{ tuning: "5 5 5 4 5", shapes: ["3 2 0 0 0 3", "x 3 2 0 1 0"] }],
+    changedAt: instant,
+    ...changes,
+  };
+}
+
+export function aLineUp(songId: string, changes: Partial<LineUp> = {}): LineUp {
+  return {
+    id: randomUUID(),
+    songId,
+    players: [
+      { id: randomUUID(), name: "Tede", instrument: "whistle-D", way: null },
+      {
+        id: randomUUID(),
+        name: "Maren",
+        instrument: "box-adf",
+        way: { into: "C", retune: 0, capo: 3, shapeKey: "A" },
+      },
+    ],
     changedAt: instant,
     ...changes,
   };

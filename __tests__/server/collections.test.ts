@@ -1,6 +1,6 @@
 import { randomUUID } from "node:crypto";
 import request from "supertest";
-import { aDecision, anInstrument, aSong, aTake, aTry, aVoice, someWishes } from "./belongings";
+import { aDecision, aLineUp, anInstrument, aSong, aTake, aTry, aVoice, someWishes } from "./belongings";
 import { Person, startTestServer, type TestServer } from "./testServer";
 
 let server: TestServer;
@@ -81,6 +81,13 @@ const collections: Collection[] = [
     change: { neverRetune: false, known: [] },
     spoil: { known: [{ tuning: "5 4", shapes: ["two fingers"] }] },
     spoiled: "known.0.shapes.0",
+  },
+  {
+    name: "line-ups",
+    make: () => aLineUp(songId),
+    change: { players: [] },
+    spoil: { players: [{ id: randomUUID(), name: " ", instrument: "banjo", way: null }] },
+    spoiled: "players.0.name",
   },
 ];
 

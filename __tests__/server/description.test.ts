@@ -80,6 +80,7 @@ it("makes its schemas from the contracts", async () => {
       "ChartPdfRequest",
       "Decision",
       "Health",
+      "LineUp",
       "MailPreferences",
       "OpenApi",
       "OwnInstrument",

@@ -1,5 +1,5 @@
 import { randomUUID } from "node:crypto";
-import { aDecision, aSong, aTake, aTry, aVoice } from "./belongings";
+import { aDecision, aLineUp, aSong, aTake, aTry, aVoice } from "./belongings";
 import { Person, startTestServer, type TestServer } from "./testServer";
 
 let server: TestServer;
@@ -95,6 +95,20 @@ it("removes tries together with their song and with their voice", async () => {
   await owner.get(`/api/tries/${ofSong.id}`).expect(404);
   await owner.get(`/api/tries/${ofVoice.id}`).expect(404);
   await owner.get(`/api/tries/${kept.id}`).expect(200);
+});
+
+it("keeps one line-up for each song, never one for somebody else's, and lets it go with its song", async () => {
+  const [mine, theirs] = [await saved(owner, "songs", aSong()), await saved(stranger, "songs", aSong())];
+  expect(await refusal(owner, "line-ups", aLineUp(theirs.id))).toMatchObject(unknown("songId"));
+  const first = await saved(owner, "line-ups", aLineUp(mine.id));
+  await stranger.get(`/api/line-ups/${first.id}`).expect(404);
+  await stranger.put(`/api/line-ups/${first.id}`, { ...first, songId: theirs.id }).expect(404);
+  expect((await owner.get(`/api/line-ups/${first.id}`)).body).toEqual(first);
+  const second = await saved(owner, "line-ups", aLineUp(mine.id, { players: [] }));
+  await owner.get(`/api/line-ups/${first.id}`).expect(404);
+  expect((await owner.get(`/api/line-ups/${second.id}`)).body).toEqual(second);
+  await owner.delete(`/api/songs/${mine.id}`).expect(204);
+  await owner.get(`/api/line-ups/${second.id}`).expect(404);
 });
 
 it("keeps a decision for each voice and one for whoever sings", async () => {

@@ -9,6 +9,7 @@ const words: Record<Collection, readonly [one: string, many: string]> = {
   tries: ["tried key", "tried keys"],
   instruments: ["instrument", "instruments"],
   wishes: ["set of wishes", "sets of wishes"],
+  "line-ups": ["line-up", "line-ups"],
 };
 
 /** "1 voice, 3 takes and 2 songs"; null where there is nothing. */

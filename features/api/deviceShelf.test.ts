@@ -1,4 +1,4 @@
-import { aDecision, aSong, aTake, aTry, aVoice } from "@/__tests__/client/belongings";
+import { aDecision, aLineUp, aSong, aTake, aTry, aVoice } from "@/__tests__/client/belongings";
 import { kept, refuseStorage } from "@/__tests__/client/memoryIdb";
 import { deviceShelf } from "./deviceShelf";
 
@@ -41,6 +41,17 @@ it("refuses references that lead nowhere, like the server", async () => {
   await expect(deviceShelf.put("decisions", aDecision(aSong().id, null))).rejects.toMatchObject({
     code: "unknown-reference",
   });
+});
+
+it("keeps one line-up for each song, and lets it go with the song", async () => {
+  const song = aSong();
+  await expect(deviceShelf.put("line-ups", aLineUp(song.id))).rejects.toMatchObject({ code: "unknown-reference" });
+  await deviceShelf.put("songs", song);
+  await deviceShelf.put("line-ups", aLineUp(song.id));
+  const second = await deviceShelf.put("line-ups", aLineUp(song.id, { players: [] }));
+  expect(await deviceShelf.list("line-ups")).toEqual([second]);
+  await deviceShelf.remove("songs", song.id);
+  expect(await deviceShelf.list("line-ups")).toEqual([]);
 });
 
 it("removes takes with their voice and decisions with their song", async () => {

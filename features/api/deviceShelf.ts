@@ -46,6 +46,7 @@ const contentOf = (song: Items["songs"]) => ({
 async function checkReferences(items: Readable, name: Collection, item: Items[Collection]): Promise<void> {
   const has = async (parent: Collection, id: string) => (await items.get(keyOf(parent, id))) !== undefined;
   if (name === "takes" && !(await has("voices", (item as Items["takes"]).voiceId))) throw unknownReference("voice");
+  if (name === "line-ups" && !(await has("songs", (item as Items["line-ups"]).songId))) throw unknownReference("song");
   if (name !== "decisions" && name !== "tries") return;
   const { songId, voiceId } = item as Items["decisions" | "tries"];
   if (!(await has("songs", songId))) throw unknownReference("song");
@@ -88,12 +89,20 @@ async function putDecision(items: DeviceItems, sent: Items["decisions"]): Promis
   return decision;
 }
 
+/** One for each song: it takes the place of others. */
+async function putLineUp(items: DeviceItems, lineUp: Items["line-ups"]): Promise<Items["line-ups"]> {
+  for (const { id, songId } of await listIn(items, "line-ups"))
+    if (songId === lineUp.songId) items.delete(keyOf("line-ups", id));
+  items.set(keyOf("line-ups", lineUp.id), lineUp);
+  return lineUp;
+}
+
 /** Takes an item and what goes with it away. */
 async function takeAway(items: DeviceItems, name: Collection, id: string): Promise<void> {
   items.delete(keyOf(name, id));
   if (name === "songs") {
     deviceHistory.forget(items, id);
-    for (const child of ["decisions", "tries"] as const)
+    for (const child of ["decisions", "tries", "line-ups"] as const)
       for (const { id: childId, songId } of await listIn(items, child))
         if (songId === id) items.delete(keyOf(child, childId));
   }
@@ -130,6 +139,7 @@ function createDeviceShelf(storage: DeviceStorage): DeviceShelf {
         await checkReferences(items, name, item);
         if (name === "songs") return (await putSong(items, item as Items["songs"], version)) as Items[C];
         if (name === "decisions") return (await putDecision(items, item as Items["decisions"])) as Items[C];
+        if (name === "line-ups") return (await putLineUp(items, item as Items["line-ups"])) as Items[C];
         items.set(keyOf(name, item.id), item);
         return item;
       }),

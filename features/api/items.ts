@@ -1,6 +1,7 @@
 import type { Decision } from "@/shared/contract/decision";
 import type { OwnInstrument } from "@/shared/contract/instrument";
 import type { PlayerWishes } from "@/shared/contract/playerWishes";
+import type { LineUp } from "@/shared/contract/lineUp";
 import type { Song } from "@/shared/contract/song";
 import type { Take } from "@/shared/contract/take";
 import type { Try } from "@/shared/contract/try";
@@ -15,6 +16,7 @@ export interface Items {
   tries: Try;
   instruments: OwnInstrument;
   wishes: PlayerWishes;
+  "line-ups": LineUp;
 }
 
 export type Collection = keyof Items;
@@ -28,6 +30,7 @@ export const collections = [
   "tries",
   "instruments",
   "wishes",
+  "line-ups",
 ] as const satisfies readonly Collection[];
 
 /** What may be asked for when something is kept. */
@@ -46,6 +49,6 @@ export interface Shelf {
    * overwritten: 409 "changed-elsewhere".
    */
   put<C extends Collection>(name: C, item: Items[C], options?: PutOptions): Promise<Items[C]>;
-  /** Takes and tries go with their voice, decisions and tries with their song. Removing what is not there is no error. */
+  /** Takes and tries go with their voice, decisions, tries and line-ups with their song. Removing what is not there is no error. */
   remove(name: Collection, id: string): Promise<void>;
 }

@@ -202,6 +202,7 @@ describe("the demonstration", () => {
       tries: 0,
       instruments: 0,
       wishes: 0,
+      "line-ups": 0,
     });
   });
 

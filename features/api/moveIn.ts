@@ -1,4 +1,5 @@
 import { joined } from "@/shared/contract/decisionHistory";
+import { joinedLineUps } from "@/shared/contract/lineUp";
 import { ApiError } from "./apiError";
 import { readBelongings, type Belongings } from "./belongings";
 import { deviceShelf } from "./deviceShelf";
@@ -41,7 +42,7 @@ function titleOf(name: Collection, item: Items[Collection]): string {
   if (name === "takes") return `A take of ${(item as Items["takes"]).sungAt.slice(0, 10)}`;
   if (name === "tries") return `A key tried on ${(item as Items["tries"]).sungAt.slice(0, 10)}`;
   if (name === "wishes") return "Your wishes and the shapes you know";
-  return "The key you chose for a song";
+  return name === "line-ups" ? "Who plays a song" : "The key you chose for a song";
 }
 
 function reasonOf(error: ApiError): string {
@@ -52,6 +53,7 @@ function reasonOf(error: ApiError): string {
 /** An item cannot arrive before what it refers to. */
 function parentsOf(name: Collection, item: Items[Collection]): string[] {
   if (name === "takes") return [(item as Items["takes"]).voiceId];
+  if (name === "line-ups") return [(item as Items["line-ups"]).songId];
   if (name !== "decisions" && name !== "tries") return [];
   const { songId, voiceId } = item as Items["decisions" | "tries"];
   return voiceId === null ? [songId] : [songId, voiceId];
@@ -86,6 +88,12 @@ async function putDecision(decision: Items["decisions"]): Promise<void> {
   await serverShelf.put("decisions", there ? joined(there, decision) : decision);
 }
 
+/** Puts a line-up into the account; where the account has one for the song, all of both play. */
+async function putLineUp(lineUp: Items["line-ups"]): Promise<void> {
+  const there = (await serverShelf.list("line-ups")).find(({ songId }) => songId === lineUp.songId);
+  await serverShelf.put("line-ups", there ? joinedLineUps(there, lineUp) : lineUp);
+}
+
 async function isSuperfluous(entry: Entry, belongings: Belongings): Promise<(song: Items["songs"]) => boolean> {
   if (entry === "sign-up" || belongings.untouched.size === 0) return () => false;
   if (entry === "sign-in") return (song) => belongings.untouched.has(song.id);
@@ -108,6 +116,7 @@ async function moveAll(entry: Entry): Promise<void> {
     }
     try {
       if (name === "decisions") await putDecision(item as Items["decisions"]);
+      else if (name === "line-ups") await putLineUp(item as Items["line-ups"]);
       else if (name !== "songs") await serverShelf.put(name, item);
       else if (!superfluous(item as Items["songs"])) await putSong(item as Items["songs"]);
     } catch (error) {

@@ -5,6 +5,7 @@ import { InstrumentEntity } from "../instruments/instrument.entity";
 import { DecisionEntity } from "../keys/decision.entity";
 import { TryEntity } from "../keys/try.entity";
 import { SheetLinkEntity } from "../sheets/sheetLink.entity";
+import { LineUpEntity } from "../lineUps/lineUp.entity";
 import { SongEntity } from "../songs/song.entity";
 import { TakeEntity } from "../voices/take.entity";
 import { VoiceEntity } from "../voices/voice.entity";
@@ -13,6 +14,7 @@ import { FirstTables1764547200000 } from "./migrations/FirstTables1764547200000"
 import { InstrumentPhotos1778000000000 } from "./migrations/InstrumentPhotos1778000000000";
 import { KeysPerVoice1775001600000 } from "./migrations/KeysPerVoice1775001600000";
 import { KindOfTake1767225600000 } from "./migrations/KindOfTake1767225600000";
+import { LineUps1785000000000 } from "./migrations/LineUps1785000000000";
 import { MailAndJobs1782000000000 } from "./migrations/MailAndJobs1782000000000";
 import { PlayerWishes1779000000000 } from "./migrations/PlayerWishes1779000000000";
 import { SheetLinks1780000000000 } from "./migrations/SheetLinks1780000000000";
@@ -34,6 +36,7 @@ const common: Pick<
     InstrumentEntity,
     PlayerWishesEntity,
     SheetLinkEntity,
+    LineUpEntity,
   ],
   synchronize: false,
   uuidExtension: "pgcrypto",
@@ -77,6 +80,7 @@ export function createMigrationSource(url: string): DataSource {
       PlayerWishes1779000000000,
       MailAndJobs1782000000000,
       SheetLinks1780000000000,
+      LineUps1785000000000,
     ],
     migrationsTransactionMode: "all",
   });

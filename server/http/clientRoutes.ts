@@ -16,6 +16,8 @@ export const clientRoutes = [
   "/songs/:id/compare",
   "/songs/:id/together",
   "/songs/:id/ways",
+  "/songs/:id/why",
+  "/songs/:id/everyone",
   "/songs/:id/melody",
   "/songs/:id/recording",
   "/songs/:id/try",

@@ -122,7 +122,8 @@ test("a stranger opens a shared sheet, moves it to a ukulele, and finds it ended
   await stranger.page.goto(address);
   await stranger.page.getByRole("heading", { name: "The Half-Past-Nine Ferry", level: 1 }).waitFor();
   const key = await stranger.page.getByTestId("sheet-key").inputValue();
-  await stranger.page.getByTestId("instrument").selectOption("ukulele");
+  await stranger.page.getByTestId("instrument").click();
+  await stranger.page.getByTestId("choose-ukulele").click();
   await stranger.page
     .getByText(/G-C-E-A/)
     .first()

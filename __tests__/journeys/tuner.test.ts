@@ -26,9 +26,10 @@ test.each([["phone"], ["wide"]] as const)(
     await page.goto("/instruments/tune?instrument=box-adf&retune=-2");
     await page.getByRole("heading", { name: "Let the A3 string down to G3" }).waitFor();
     await page.getByTestId("tuner-listen").click();
-    await page.getByText(/^(19|20|21) cents low$/).waitFor();
-    await page.getByText("Turn the peg up.").waitFor();
-    await page.getByText("That is the D4 string").waitFor();
+    const reading = page.getByTestId("tuner-reading");
+    await reading.getByText(/^(19|20|21) cents low$/).waitFor();
+    await reading.getByText("Turn the peg up.").waitFor();
+    await reading.getByText("That is the D4 string").waitFor();
     await page.getByTestId("tune-that").waitFor();
     await page.getByRole("heading", { name: "Let the D4 string down to C4" }).waitFor();
     await page.getByRole("button", { name: "A3 string, A3 to G3, in tune" }).waitFor();

@@ -36,7 +36,8 @@ function tiltLean(cents: number): number {
 /** The last moments of one string about the line of its note: bars that lean by what is missing and lie level when it is there. */
 export function TiltPicture({ trail, target, width, height, label }: TiltPictureProps) {
   const now = trail[trail.length - 1]?.t ?? 0;
-  const pace = (width - left - right - 30) / shownS;
+  const pace = (width - left - right) / (shownS + barS);
+  const long = Math.max(24, barS * pace - 6);
   const middle = height / 2;
   return (
     <Svg width={width} height={height} role="img" aria-label={label} testID="tilt-picture">
@@ -70,21 +71,20 @@ export function TiltPicture({ trail, target, width, height, label }: TiltPicture
       {barsOf(trail, now).map(({ t, cents, newest }) => (
         <Bar
           key={t}
-          x={width - right - 30 - (now - t) * pace}
+          x={width - right - long / 2 - (now - t) * pace}
           y={tiltY(cents, height)}
           cents={cents}
           newest={newest}
-          pace={pace}
+          long={long}
         />
       ))}
     </Svg>
   );
 }
 
-function Bar({ x, y, cents, newest, pace }: { x: number; y: number; cents: number; newest: boolean; pace: number }) {
+function Bar({ x, y, cents, newest, long }: { x: number; y: number; cents: number; newest: boolean; long: number }) {
   const off = Math.abs(cents);
   const color = off <= inTuneCents ? colors.lagoon : off <= 20 ? colors.honey : colors.brick;
-  const long = Math.max(24, barS * pace - 6);
   const dotted = off > 20;
   return (
     <G transform={`translate(${x} ${y}) rotate(${tiltLean(cents)})`} opacity={newest ? 1 : 0.76}>

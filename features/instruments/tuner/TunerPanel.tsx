@@ -6,6 +6,7 @@ import { Heading } from "@/features/ui/Heading";
 import { LiveText } from "@/features/ui/LiveText";
 import { Notice } from "@/features/ui/Notice";
 import { Text } from "@/features/ui/Text";
+import { useLayout } from "@/features/ui/useLayout";
 import type { Instrument } from "@/shared/instruments/instrument";
 import type { TuningPlan } from "@/shared/instruments/stringTuning";
 import { TiltPicture } from "./TiltPicture";
@@ -24,6 +25,7 @@ export interface TunerPanelProps {
 
 /** The string asked for now: what to do, how far it is, in words and as a picture. */
 export function TunerPanel({ instrument, plan, state, microphone, a4, send }: TunerPanelProps) {
+  const wide = useLayout() === "wide";
   const [width, setWidth] = useState(340);
   const { heard, asked } = state;
   const words = heard && heardWords(instrument, plan, state, heard);
@@ -41,12 +43,16 @@ export function TunerPanel({ instrument, plan, state, microphone, a4, send }: Tu
           trail={heard && heard.index === asked && heard.octaves === 0 ? state.trail : []}
           target={target}
           width={width}
-          height={208}
+          height={wide ? 336 : 208}
           label={words ? `${off}, measured against ${target}` : `Nothing heard yet. The line is ${target}`}
         />
       </View>
       <View testID="tuner-reading">
-        <Text variant="strong" style={{ fontSize: 26, lineHeight: 32 }} tone={words?.stop ? "brick" : "ink"}>
+        <Text
+          variant="strong"
+          style={wide ? { fontSize: 36, lineHeight: 42 } : { fontSize: 26, lineHeight: 32 }}
+          tone={words?.stop ? "brick" : "ink"}
+        >
           {off}
         </Text>
         <Text>{turn}</Text>

@@ -3,6 +3,7 @@ import cookieParser from "cookie-parser";
 import express, { type Express } from "express";
 import type { Logger } from "pino";
 import type { DataSource } from "typeorm";
+import { arrangementsRoutes } from "./arrangements/arrangements.router";
 import { authenticate } from "./auth/accessToken";
 import { authRoutes } from "./auth/auth.router";
 import { chartsRoutes } from "./charts/charts.router";
@@ -46,6 +47,7 @@ export function createApp(dataSource: DataSource, logger: Logger, settings: AppS
   instrumentsRoutes(api, dataSource);
   playerWishesRoutes(api, dataSource);
   lineUpsRoutes(api, dataSource);
+  arrangementsRoutes(api, dataSource);
   chartsRoutes(api, dataSource);
   mailRoutes(api, dataSource, settings);
   sheetsRoutes(api, dataSource);

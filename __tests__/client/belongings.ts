@@ -1,3 +1,4 @@
+import type { Arrangement } from "@/shared/contract/arrangement";
 import type { Decision } from "@/shared/contract/decision";
 import type { OwnInstrument } from "@/shared/contract/instrument";
 import type { LineUp } from "@/shared/contract/lineUp";
@@ -15,6 +16,20 @@ export const aVoice = (change: Partial<Voice> = {}): Voice => ({
   id: nextId(),
   name: "Maren",
   byHand: null,
+  createdAt: when,
+  ...change,
+});
+
+export const anArrangement = (songId: string, change: Partial<Arrangement> = {}): Arrangement => ({
+  id: nextId(),
+  songId,
+  name: "Up the neck",
+  tonic: "C",
+  shift: -2,
+  instrument: "box-adf",
+  way: { retune: 0, capo: 0, shapeKey: "C" },
+  chords: [],
+  pattern: { name: "Down strokes", beats: 4, steps: ["down", "rest", "down", "rest", "down", "rest", "down", "rest"] },
   createdAt: when,
   ...change,
 });

@@ -1,4 +1,5 @@
 import { signInRequest, signUpRequest } from "@/shared/contract/account";
+import { arrangement } from "@/shared/contract/arrangement";
 import { decision } from "@/shared/contract/decision";
 import { ownInstrument } from "@/shared/contract/instrument";
 import { playerWishes } from "@/shared/contract/playerWishes";
@@ -33,6 +34,7 @@ const schemas = {
   songs: song,
   decisions: decision,
   tries: songTry,
+  arrangements: arrangement,
   instruments: ownInstrument,
   wishes: playerWishes,
   "line-ups": lineUp,
@@ -57,6 +59,7 @@ export class FakeApi {
     songs: new Map(),
     decisions: new Map(),
     tries: new Map(),
+    arrangements: new Map(),
     instruments: new Map(),
     wishes: new Map(),
     "line-ups": new Map(),

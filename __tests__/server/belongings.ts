@@ -1,4 +1,5 @@
 import { randomUUID } from "node:crypto";
+import type { Arrangement } from "../../shared/contract/arrangement";
 import type { Decision } from "../../shared/contract/decision";
 import type { OwnInstrument } from "../../shared/contract/instrument";
 import type { PlayerWishes } from "../../shared/contract/playerWishes";
@@ -85,6 +86,26 @@ export function anInstrument(changes: Partial<OwnInstrument> = {}): OwnInstrumen
     capoTo: 7,
     leftHanded: true,
     favourite: false,
+    ...changes,
+  };
+}
+
+export function anArrangement(songId: string, changes: Partial<Arrangement> = {}): Arrangement {
+  const shape = { frets: [null, 5, 5], fingers: [0, 1, 1], reachMm: 0, ease: 0.75, roots: [1] };
+  return {
+    id: randomUUID(),
+    songId,
+    name: "Up the neck",
+    tonic: "Bb",
+    shift: -2,
+    instrument: "box-adf",
+    way: { retune: -2, capo: 1, shapeKey: "B" },
+    chords: [
+      { written: "C", sounding: "Bb", played: "B", shape: { ...shape, barre: { fret: 5, fromString: 1, toString: 2 } } },
+      { written: "N.C.", sounding: "N.C.", played: "N.C.", shape: null },
+    ],
+    pattern: { name: "Pluck and strum", beats: 4, steps: ["pluck", "rest", "down", "up"] },
+    createdAt: instant,
     ...changes,
   };
 }

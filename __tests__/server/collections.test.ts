@@ -1,6 +1,6 @@
 import { randomUUID } from "node:crypto";
 import request from "supertest";
-import { aDecision, aLineUp, anInstrument, aSong, aTake, aTry, aVoice, someWishes } from "./belongings";
+import { aDecision, anArrangement, aLineUp, anInstrument, aSong, aTake, aTry, aVoice, someWishes } from "./belongings";
 import { Person, startTestServer, type TestServer } from "./testServer";
 
 let server: TestServer;
@@ -88,6 +88,13 @@ const collections: Collection[] = [
     change: { players: [] },
     spoil: { players: [{ id: randomUUID(), name: " ", instrument: "banjo", way: null }] },
     spoiled: "players.0.name",
+  },
+  {
+    name: "arrangements",
+    make: () => anArrangement(songId),
+    change: { name: "For the concert", pattern: { name: "Own", beats: 3, steps: ["bass", "rest", "down", "up"] } },
+    spoil: { pattern: { name: "Own", beats: 4, steps: ["slap"] } },
+    spoiled: "pattern.steps.0",
   },
 ];
 

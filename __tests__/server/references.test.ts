@@ -1,5 +1,5 @@
 import { randomUUID } from "node:crypto";
-import { aDecision, aLineUp, aSong, aTake, aTry, aVoice } from "./belongings";
+import { aDecision, anArrangement, aLineUp, aSong, aTake, aTry, aVoice } from "./belongings";
 import { Person, startTestServer, type TestServer } from "./testServer";
 
 let server: TestServer;
@@ -109,6 +109,15 @@ it("keeps one line-up for each song, never one for somebody else's, and lets it 
   expect((await owner.get(`/api/line-ups/${second.id}`)).body).toEqual(second);
   await owner.delete(`/api/songs/${mine.id}`).expect(204);
   await owner.get(`/api/line-ups/${second.id}`).expect(404);
+});
+
+it("refuses an arrangement of somebody else's song, and removes one together with its song", async () => {
+  const theirs = await saved(stranger, "songs", aSong());
+  expect(await refusal(owner, "arrangements", anArrangement(theirs.id))).toMatchObject(unknown("songId"));
+  const song = await saved(owner, "songs", aSong());
+  const arrangement = await saved(owner, "arrangements", anArrangement(song.id));
+  await owner.delete(`/api/songs/${song.id}`).expect(204);
+  await owner.get(`/api/arrangements/${arrangement.id}`).expect(404);
 });
 
 it("keeps a decision for each voice and one for whoever sings", async () => {

@@ -10,6 +10,7 @@ const words: Record<Collection, readonly [one: string, many: string]> = {
   instruments: ["instrument", "instruments"],
   wishes: ["set of wishes", "sets of wishes"],
   "line-ups": ["line-up", "line-ups"],
+  arrangements: ["arrangement", "arrangements"],
 };
 
 /** "1 voice, 3 takes and 2 songs"; null where there is nothing. */

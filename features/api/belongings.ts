@@ -4,7 +4,7 @@ import type { Collection, Items } from "./items";
 /** How many of each. */
 export type Counts = Record<Collection, number>;
 
-/** Everything this device keeps. `untouched` are the demonstration songs nobody changed, decided a key for, tried or gave players. */
+/** Everything this device keeps. `untouched` are the demonstration songs nobody changed, decided a key for, tried, gave players or arranged. */
 export interface Belongings {
   items: { [C in Collection]: Items[C][] };
   untouched: ReadonlySet<string>;
@@ -12,7 +12,7 @@ export interface Belongings {
 
 /** Reads the whole device shelf. */
 export async function readBelongings(): Promise<Belongings> {
-  const [voices, takes, songs, decisions, tries, instruments, wishes, lineUps] = await Promise.all([
+  const [voices, takes, songs, decisions, tries, instruments, wishes, lineUps, arrangements] = await Promise.all([
     deviceShelf.list("voices"),
     deviceShelf.list("takes"),
     deviceShelf.list("songs"),
@@ -21,11 +21,12 @@ export async function readBelongings(): Promise<Belongings> {
     deviceShelf.list("instruments"),
     deviceShelf.list("wishes"),
     deviceShelf.list("line-ups"),
+    deviceShelf.list("arrangements"),
   ]);
-  const decided = new Set([...decisions, ...tries, ...lineUps].map(({ songId }) => songId));
+  const decided = new Set([...decisions, ...tries, ...lineUps, ...arrangements].map(({ songId }) => songId));
   const untouched = new Set<string>();
   for (const song of songs) if (!decided.has(song.id) && (await deviceShelf.isAsSeeded(song))) untouched.add(song.id);
-  return { items: { voices, takes, songs, decisions, tries, instruments, wishes, "line-ups": lineUps }, untouched };
+  return { items: { voices, takes, songs, decisions, tries, instruments, wishes, "line-ups": lineUps, arrangements }, untouched };
 }
 
 /** What the person did on this device, without the demonstration as it came. */
@@ -40,5 +41,6 @@ export async function countBelongings(): Promise<Counts> {
     instruments: items.instruments.length,
     wishes: items.wishes.length,
     "line-ups": items["line-ups"].length,
+    arrangements: items.arrangements.length,
   };
 }

@@ -1,4 +1,4 @@
-import { aDecision, aLineUp, aSong, aTake, aTry, aVoice } from "@/__tests__/client/belongings";
+import { aDecision, anArrangement, aLineUp, aSong, aTake, aTry, aVoice } from "@/__tests__/client/belongings";
 import { kept, refuseStorage } from "@/__tests__/client/memoryIdb";
 import { deviceShelf } from "./deviceShelf";
 
@@ -189,4 +189,16 @@ it("says in words that the browser keeps nothing, and that the device is full", 
   });
   refuseStorage(new DOMException("full", "QuotaExceededError"));
   await expect(deviceShelf.put("voices", aVoice())).rejects.toMatchObject({ code: "device-full" });
+});
+
+it("keeps arrangements of a song that is here, and lets them go with it", async () => {
+  const [song, other] = [aSong(), aSong()];
+  await expect(deviceShelf.put("arrangements", anArrangement(song.id))).rejects.toMatchObject({ status: 422 });
+  await deviceShelf.put("songs", song);
+  await deviceShelf.put("songs", other);
+  const stays = anArrangement(other.id);
+  await deviceShelf.put("arrangements", anArrangement(song.id));
+  await deviceShelf.put("arrangements", stays);
+  await deviceShelf.remove("songs", song.id);
+  expect(await deviceShelf.list("arrangements")).toEqual([stays]);
 });

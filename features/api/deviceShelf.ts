@@ -46,7 +46,9 @@ const contentOf = (song: Items["songs"]) => ({
 async function checkReferences(items: Readable, name: Collection, item: Items[Collection]): Promise<void> {
   const has = async (parent: Collection, id: string) => (await items.get(keyOf(parent, id))) !== undefined;
   if (name === "takes" && !(await has("voices", (item as Items["takes"]).voiceId))) throw unknownReference("voice");
-  if (name === "line-ups" && !(await has("songs", (item as Items["line-ups"]).songId))) throw unknownReference("song");
+  if (name === "line-ups" || name === "arrangements") {
+    if (!(await has("songs", (item as Items["line-ups" | "arrangements"]).songId))) throw unknownReference("song");
+  }
   if (name !== "decisions" && name !== "tries") return;
   const { songId, voiceId } = item as Items["decisions" | "tries"];
   if (!(await has("songs", songId))) throw unknownReference("song");
@@ -102,7 +104,7 @@ async function takeAway(items: DeviceItems, name: Collection, id: string): Promi
   items.delete(keyOf(name, id));
   if (name === "songs") {
     deviceHistory.forget(items, id);
-    for (const child of ["decisions", "tries", "line-ups"] as const)
+    for (const child of ["decisions", "tries", "line-ups", "arrangements"] as const)
       for (const { id: childId, songId } of await listIn(items, child))
         if (songId === id) items.delete(keyOf(child, childId));
   }

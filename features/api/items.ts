@@ -1,3 +1,4 @@
+import type { Arrangement } from "@/shared/contract/arrangement";
 import type { Decision } from "@/shared/contract/decision";
 import type { OwnInstrument } from "@/shared/contract/instrument";
 import type { PlayerWishes } from "@/shared/contract/playerWishes";
@@ -17,6 +18,7 @@ export interface Items {
   instruments: OwnInstrument;
   wishes: PlayerWishes;
   "line-ups": LineUp;
+  arrangements: Arrangement;
 }
 
 export type Collection = keyof Items;
@@ -31,6 +33,7 @@ export const collections = [
   "instruments",
   "wishes",
   "line-ups",
+  "arrangements",
 ] as const satisfies readonly Collection[];
 
 /** What may be asked for when something is kept. */
@@ -49,6 +52,6 @@ export interface Shelf {
    * overwritten: 409 "changed-elsewhere".
    */
   put<C extends Collection>(name: C, item: Items[C], options?: PutOptions): Promise<Items[C]>;
-  /** Takes and tries go with their voice, decisions, tries and line-ups with their song. Removing what is not there is no error. */
+  /** Takes and tries go with their voice, decisions, tries, line-ups and arrangements with their song. Removing what is not there is no error. */
   remove(name: Collection, id: string): Promise<void>;
 }

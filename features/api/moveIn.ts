@@ -53,7 +53,7 @@ function reasonOf(error: ApiError): string {
 /** An item cannot arrive before what it refers to. */
 function parentsOf(name: Collection, item: Items[Collection]): string[] {
   if (name === "takes") return [(item as Items["takes"]).voiceId];
-  if (name === "line-ups") return [(item as Items["line-ups"]).songId];
+  if (name === "line-ups" || name === "arrangements") return [(item as Items["line-ups" | "arrangements"]).songId];
   if (name !== "decisions" && name !== "tries") return [];
   const { songId, voiceId } = item as Items["decisions" | "tries"];
   return voiceId === null ? [songId] : [songId, voiceId];

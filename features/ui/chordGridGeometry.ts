@@ -1,3 +1,4 @@
+import { stringWords } from "@/shared/instruments/stringWords";
 import type { GridWindow } from "@/shared/ways/gridWindow";
 import type { Shape } from "@/shared/ways/way";
 
@@ -49,23 +50,6 @@ export interface SpokenGrid {
   stringNames?: readonly string[] | undefined;
   /** what the frets are called, from the open string on; their numbers unless told otherwise */
   fretNames?: readonly string[] | undefined;
-}
-
-const ordinals = ["first", "second", "third", "fourth", "fifth", "sixth", "seventh", "eighth"];
-
-/** A string by its note; two of one note are told apart as low and high, more of them by their places. */
-function stringWords(index: number, names: readonly string[] | undefined): string {
-  const name = names?.[index];
-  const place = ordinals[index] ?? String(index + 1);
-  if (!names || name === undefined) return `${place} string`;
-  const letter = (full: string) => full.replace(/-?\d+$/, "");
-  const alike = names.filter((other) => letter(other) === letter(name));
-  if (alike.length === 1) return `${letter(name)} string`;
-  const octaves = alike.map((other) => Number(/-?\d+$/.exec(other)?.[0] ?? NaN));
-  const own = Number(/-?\d+$/.exec(name)?.[0] ?? NaN);
-  if (alike.length === 2 && octaves.every(Number.isFinite) && octaves[0] !== octaves[1])
-    return `${own === Math.min(...octaves) ? "low" : "high"} ${letter(name)} string`;
-  return `${place} string, ${letter(name)},`;
 }
 
 /** The whole grid in words, string by string from the bass side. */

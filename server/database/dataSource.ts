@@ -1,5 +1,6 @@
 import "reflect-metadata";
 import { DataSource, type DataSourceOptions } from "typeorm";
+import { ArrangementEntity } from "../arrangements/arrangement.entity";
 import { UserEntity } from "../auth/user.entity";
 import { InstrumentEntity } from "../instruments/instrument.entity";
 import { DecisionEntity } from "../keys/decision.entity";
@@ -10,6 +11,7 @@ import { SongEntity } from "../songs/song.entity";
 import { TakeEntity } from "../voices/take.entity";
 import { VoiceEntity } from "../voices/voice.entity";
 import { PlayerWishesEntity } from "../ways/playerWishes.entity";
+import { Arrangements1784000000000 } from "./migrations/Arrangements1784000000000";
 import { FirstTables1764547200000 } from "./migrations/FirstTables1764547200000";
 import { InstrumentPhotos1778000000000 } from "./migrations/InstrumentPhotos1778000000000";
 import { KeysPerVoice1775001600000 } from "./migrations/KeysPerVoice1775001600000";
@@ -37,6 +39,7 @@ const common: Pick<
     PlayerWishesEntity,
     SheetLinkEntity,
     LineUpEntity,
+    ArrangementEntity,
   ],
   synchronize: false,
   uuidExtension: "pgcrypto",
@@ -79,6 +82,7 @@ export function createMigrationSource(url: string): DataSource {
       InstrumentPhotos1778000000000,
       PlayerWishes1779000000000,
       MailAndJobs1782000000000,
+      Arrangements1784000000000,
       SheetLinks1780000000000,
       LineUps1785000000000,
     ],

@@ -1,23 +1,13 @@
 import { z } from "zod";
+import { shape } from "./shape";
 import { song, tonicName } from "./song";
 
 const key = song.shape.writtenKey.unwrap();
 const name = z.string().max(80);
-const fret = z.int().min(0).max(36);
-const string = z.int().min(0).max(11);
 const strings = z
   .array(z.string().regex(/^[A-G](#|b)?-?\d$/, "Name a string like A3 or F#4."))
   .min(1)
   .max(12);
-
-const shape = z.strictObject({
-  frets: z.array(fret.nullable()).min(1).max(12),
-  fingers: z.array(z.int().min(0).max(5)).min(1).max(12),
-  barre: z.strictObject({ fret, fromString: string, toString: string }).nullable(),
-  reachMm: z.number().min(0).max(2000),
-  ease: z.number().min(0).max(1),
-  roots: z.array(string).max(12),
-});
 
 const sheet = z.strictObject({
   title: song.shape.title,

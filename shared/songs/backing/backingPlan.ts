@@ -1,3 +1,4 @@
+import type { Chord } from "../../music/chord";
 import type { RightHand } from "./rightHand";
 import type { Metre } from "./metre";
 
@@ -7,7 +8,7 @@ export interface BackingEvent {
   /** until it is damped or ends */
   duration: number;
   kind: "strum-down" | "strum-up" | "pluck" | "bass" | "click" | "guide";
-  /** MIDI numbers ascending; a click has none */
+  /** MIDI numbers from the bass side of the neck to the treble side; a click has none */
   midis: readonly number[];
   /** 0 to 1 */
   level: number;
@@ -62,11 +63,27 @@ export interface BackingPlan {
   durationS: number;
 }
 
+/** A chord from `at` (quarter notes from the song's start) until the next one; null is silence. */
+export interface ChordInTime {
+  at: number;
+  chord: Chord | null;
+}
+
+/**
+ * A right hand of its own: gets the chords as written and the length of the song, gives what sounds by time, `at` and
+ * `duration` in quarter notes from the song's start.
+ */
+export type HandPlayer = (
+  chords: readonly ChordInTime[],
+  song: { metre: Metre; bars: number },
+) => readonly BackingEvent[];
+
 /** How a backing is to be played. */
 export interface BackingWishes {
   /** quarter notes a minute, 20 to 400; default the song's, else 90 */
   tempo?: number;
-  hand?: RightHand;
+  /** one of the patterns, or somebody who plays the chords in their own way */
+  hand?: RightHand | HandPlayer;
   /** default 1 */
   countInBars?: 1 | 2;
   /** plays the tune softly along; default no */

@@ -1,16 +1,11 @@
 import type { Chord } from "../../music/chord";
 import { tonicPitchClass } from "../../music/keyName";
 import { pitchClass } from "../../music/pitch";
-import type { BackingEvent } from "./backingPlan";
+import type { BackingEvent, ChordInTime } from "./backingPlan";
 import { bassNotes, voiceChord } from "./chordVoicing";
 import type { Metre } from "./metre";
 import { handPattern, type HandStroke, type RightHand } from "./rightHand";
-
-/** A chord from `at` (quarter notes from the song's start) until the next one; null is silence. */
-export interface ChordInTime {
-  at: number;
-  chord: Chord | null;
-}
+import { strikesAt, strokesInTime } from "./strokesInTime";
 
 /** How the chords are to be played. */
 export interface HandShape {
@@ -41,41 +36,27 @@ export function playHand(chords: readonly ChordInTime[], semitones: number, shap
   const { metre, bars, hand } = shape;
   const length = bars * metre.quarters;
   const sounding = voiced(chords, semitones, length);
-  const strokes: (HandStroke & { chord: Sounding })[] = [];
-  let current = 0;
-  for (let bar = 0; bar < bars; bar += 1) {
-    const from = bar * metre.quarters;
-    const pattern = bar === bars - 1 ? [] : handPattern(hand, metre, bar);
-    const changes = sounding.filter(({ at }) => at >= from - 1e-9 && at < from + metre.quarters - 1e-9);
-    const here = [
-      ...pattern.map((each) => ({ ...each, at: from + each.at })),
-      ...changes.flatMap(({ at }) => struckAnyway(at, from, pattern)),
-      ...(bar === bars - 1 && changes.every(({ at }) => at > from + 1e-9) ? struckAnyway(from, from, []) : []),
-    ].sort((a, b) => a.at - b.at);
-    for (const each of here) {
-      while (sounding[current] && sounding[current]!.end <= each.at + 1e-9) current += 1;
-      const chord = sounding[current];
-      if (chord && chord.at <= each.at + 1e-9) strokes.push({ ...each, chord });
-    }
-  }
+  const patternOf = (bar: number) => handPattern(hand, metre, bar);
+  const strokes = strokesInTime(sounding, { metre, bars, patternOf, struckAnyway });
   return strokes.map((each, index) => {
+    const chord = sounding[each.chord]!;
     const next = strokes
       .slice(index + 1, index + 24)
       .find(({ at, kind }) => at > each.at + 1e-9 && family(kind) === family(each.kind));
-    const end = Math.min(each.chord.end, next?.at ?? length);
+    const end = Math.min(chord.end, next?.at ?? length);
     return {
       at: each.at,
       duration: end - each.at,
       kind: soundOf(each.kind),
-      midis: pitchesOf(each),
+      midis: pitchesOf(each.kind, chord),
       level: each.level,
     };
   });
 }
 
 /** What a change of chord adds where the pattern strikes nothing: a bass note and a stroke. */
-function struckAnyway(at: number, from: number, pattern: readonly HandStroke[]): HandStroke[] {
-  const has = (kinds: RegExp) => pattern.some((each) => Math.abs(from + each.at - at) < 1e-6 && kinds.test(each.kind));
+function struckAnyway(at: number, pattern: readonly HandStroke[]): HandStroke[] {
+  const has = (kinds: RegExp) => strikesAt(pattern, at, ({ kind }) => kinds.test(kind));
   return [
     ...(has(/^bass/) ? [] : [{ at, kind: "bass-first" as const, level: 0.75 }]),
     ...(has(/^(strum|pluck)/) ? [] : [{ at, kind: "strum-down" as const, level: 0.8 }]),
@@ -102,7 +83,7 @@ function soundOf(kind: HandStroke["kind"]): BackingEvent["kind"] {
   return kind === "bass-first" || kind === "bass-other" ? "bass" : kind;
 }
 
-function pitchesOf({ kind, chord }: { kind: HandStroke["kind"]; chord: Sounding }): number[] {
+function pitchesOf(kind: HandStroke["kind"], chord: Sounding): number[] {
   if (kind === "bass-first") return [chord.bass.first];
   if (kind === "bass-other") return [chord.bass.other];
   return kind === "pluck" ? [chord.plucked] : chord.voicing;

@@ -2,8 +2,16 @@ import { transposeChord } from "../../music/chord";
 import { type KeyName, tonicPitchClass } from "../../music/keyName";
 import { parseChart } from "../chart";
 import type { MelodyNote } from "../melody";
-import type { BackingBeat, BackingEvent, BackingPlan, BackingStretch, BackingWishes, PlannedNote } from "./backingPlan";
-import { type ChordInTime, playHand } from "./handEvents";
+import type {
+  BackingBeat,
+  BackingEvent,
+  BackingPlan,
+  BackingStretch,
+  BackingWishes,
+  ChordInTime,
+  PlannedNote,
+} from "./backingPlan";
+import { playHand } from "./handEvents";
 import { type Metre, metreOf } from "./metre";
 import { phraseBreaks } from "./phraseBreaks";
 import { songBars, type SongPart } from "./songBars";
@@ -64,11 +72,13 @@ export function planBacking(song: BackingSong, key: BackingKey, wishes: BackingW
   const semitones = song.writtenKey ? tonicPitchClass(key.tonic) - tonicPitchClass(song.writtenKey.tonic) : key.shift;
   const target = { tonic: key.tonic, mode: song.writtenKey?.mode ?? ("major" as const) };
   const beats = countedBeats(metre, tempo, countInBars, bars);
-  const shape = { metre, bars, hand: wishes.hand ?? "strum" };
+  const hand = wishes.hand ?? "strum";
   const planned = sung.notes.map(({ at, duration, midi, phrase }): PlannedNote => {
     return { at: countInS + seconds(at), duration: seconds(duration), midi: midi + key.shift, phrase };
   });
-  const played = playHand(chords, semitones, shape).map((event) => {
+  const strokes =
+    typeof hand === "function" ? hand(chords, { metre, bars }) : playHand(chords, semitones, { metre, bars, hand });
+  const played = strokes.map((event) => {
     const at = countInS + seconds(event.at);
     return { ...event, at, duration: Math.min(seconds(event.duration), durationS - at) };
   });

@@ -101,7 +101,12 @@ export function anArrangement(songId: string, changes: Partial<Arrangement> = {}
     instrument: "box-adf",
     way: { retune: -2, capo: 1, shapeKey: "B" },
     chords: [
-      { written: "C", sounding: "Bb", played: "B", shape: { ...shape, barre: { fret: 5, fromString: 1, toString: 2 } } },
+      {
+        written: "C",
+        sounding: "Bb",
+        played: "B",
+        shape: { ...shape, barre: { fret: 5, fromString: 1, toString: 2 } },
+      },
       { written: "N.C.", sounding: "N.C.", played: "N.C.", shape: null },
     ],
     pattern: { name: "Pluck and strum", beats: 4, steps: ["pluck", "rest", "down", "up"] },

@@ -10,7 +10,10 @@ const pattern = z.strictObject({
   /** the upper figure of the metre it is for */
   beats: z.int().min(1).max(16),
   /** one for each eighth of the bar */
-  steps: z.array(z.enum(["down", "up", "bass", "pluck", "rest"])).min(1).max(32),
+  steps: z
+    .array(z.enum(["down", "up", "bass", "pluck", "rest"]))
+    .min(1)
+    .max(32),
 });
 
 /** One way of playing a song in one key on one instrument: a shape for each chord, and what the right hand does. */

@@ -1,3 +1,4 @@
+import type { Href } from "expo-router";
 import { useId } from "react";
 import { Pressable, View } from "react-native";
 import { Icon } from "@/features/ui/Icon";
@@ -8,13 +9,19 @@ import { colors } from "@/features/ui/theme";
 import { tunePath } from "@/features/ui/tunePath";
 import { webProps } from "@/features/ui/webStyle";
 import type { Instrument } from "@/shared/instruments/instrument";
-import type { Way } from "@/shared/ways/way";
+import type { Way, WayChord } from "@/shared/ways/way";
 import { WayGrids } from "./WayGrids";
 
 /** What a player knows, and how to change it. */
 export interface ShapeTicks {
   known: readonly string[];
   onKnown: (mark: string, known: boolean) => void;
+}
+
+/** Ways on from a way: to its arrangements, and to one of its chords on the whole neck. */
+export interface WayLinks {
+  arrange: (way: Way) => Href;
+  onNeck: (way: Way, chord: WayChord) => Href;
 }
 
 export interface WayCardProps {
@@ -28,10 +35,11 @@ export interface WayCardProps {
   full?: boolean;
   /** where the player may tell which shapes they know */
   ticks?: ShapeTicks | undefined;
+  links?: WayLinks | undefined;
 }
 
 /** One way: what to do, what it costs, the shapes, and what to take care of. */
-export function WayCard({ way, instrument, chosen, radio, onChoose, full = false, ticks }: WayCardProps) {
+export function WayCard({ way, instrument, chosen, radio, onChoose, full = false, ticks, links }: WayCardProps) {
   const id = useId();
   return (
     <>
@@ -58,7 +66,12 @@ export function WayCard({ way, instrument, chosen, radio, onChoose, full = false
         </View>
         <RadioDot on={chosen} />
       </Pressable>
-      <WayGrids way={way} instrument={instrument} {...ticks} />
+      <WayGrids way={way} instrument={instrument} onNeck={links && ((chord) => links.onNeck(way, chord))} {...ticks} />
+      {chosen && links && (
+        <TextLink href={links.arrange(way)} testID="arrange">
+          Other shapes and the right hand
+        </TextLink>
+      )}
       {chosen && (way.retune !== 0 || way.capo > 0) && (
         <TextLink href={tunePath(instrument.id, way.retune, way.capo)}>Tune for this, string by string</TextLink>
       )}

@@ -4,7 +4,7 @@ import { useRadioKeys } from "@/features/ui/useRadioKeys";
 import { webProps, webStyle } from "@/features/ui/webStyle";
 import type { Instrument } from "@/shared/instruments/instrument";
 import type { Way } from "@/shared/ways/way";
-import { WayCard, type ShapeTicks } from "./WayCard";
+import { WayCard, type ShapeTicks, type WayLinks } from "./WayCard";
 
 export interface WayListProps {
   ways: readonly Way[];
@@ -15,10 +15,11 @@ export interface WayListProps {
   columns?: number;
   full?: boolean;
   ticks?: ShapeTicks | undefined;
+  links?: WayLinks | undefined;
 }
 
 /** The ways as a radio group. A press anywhere on a card chooses it; the keyboard has one stop in its head. */
-export function WayList({ ways, instrument, chosen, onChoose, columns = 1, full = false, ticks }: WayListProps) {
+export function WayList({ ways, instrument, chosen, onChoose, columns = 1, full = false, ticks, links }: WayListProps) {
   const values = ways.map((_, index) => String(index));
   const keys = useRadioKeys(values, String(chosen), (value) => onChoose(Number(value)));
   return (
@@ -46,6 +47,7 @@ export function WayList({ ways, instrument, chosen, onChoose, columns = 1, full 
               onChoose={() => onChoose(index)}
               full={full}
               ticks={ticks}
+              links={links}
             />
           </Card>
         </View>

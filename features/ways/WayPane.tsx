@@ -12,7 +12,7 @@ import { glyphs } from "@/shared/music/pitch";
 import type { Instrument } from "@/shared/instruments/instrument";
 import type { Way } from "@/shared/ways/way";
 import { differentWays } from "@/shared/ways/wayOrder";
-import type { ShapeTicks } from "./WayCard";
+import type { ShapeTicks, WayLinks } from "./WayCard";
 import { WayList } from "./WayList";
 import { takeLabel, takeLabelIn, wayKept } from "./wayWords";
 
@@ -43,6 +43,8 @@ export interface WayPaneProps {
   ticks?: ShapeTicks | undefined;
   /** where the chosen way stands on paper */
   sheet?: (way: Way) => Href;
+  /** to arrangements and to chords on the whole neck */
+  links?: WayLinks | undefined;
   /** where the ways stand, and where the button that takes one */
   children: (parts: { list: ReactNode; use: ReactNode }) => ReactNode;
 }
@@ -62,6 +64,7 @@ export function WayPane({
   full = false,
   ticks,
   sheet,
+  links,
   children,
 }: WayPaneProps) {
   const [chosen, setChosen] = useState<string | null>(null);
@@ -134,6 +137,7 @@ export function WayPane({
         columns={full && wide ? Math.min(3, ways.length) : 1}
         full={full}
         ticks={ticks}
+        links={links}
       />
     ),
     use: (

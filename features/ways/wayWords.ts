@@ -17,11 +17,16 @@ export function takeLabelIn(sign: string, { retune, capo }: Moves): string {
 }
 
 /** A way in the few words that a table row has room for. */
-export function shortWay({ retune, capo, shapeKey }: Moves): string {
+export function shortWay({ retune, capo, shapeKey }: Omit<Moves, "kind">): string {
   const shapes = `shapes in ${glyphs(shapeKey)}`;
   const retuned = `${Math.abs(retune)} ${retune < 0 ? "down" : "up"}`;
   if (retune === 0) return capo === 0 ? `As tuned, ${shapes}` : `Capo ${capo}, ${shapes}`;
   return capo === 0 ? `Retuned ${retuned}, ${shapes}` : `Retuned ${retuned}, capo ${capo}, ${shapes}`;
+}
+
+/** What is done to the instrument, in a sentence: "Capo 3, shapes in A." */
+export function wayPlace(moves: Pick<Way, "retune" | "capo" | "shapeKey">): string {
+  return `${shortWay(moves)}.`;
 }
 
 /** How hard, in a word. */

@@ -36,7 +36,15 @@ const retunes = [0, -1, -2, -3, -4, 1];
 const highestCapo = 9;
 
 /** Cost of what is done to the instrument, on the scale of one shape's cost. */
-const work = { capo: 0.1, capoFret: 0.06, capoFretBeyondFive: 0.3, retune: 0.4, retuneSemitone: 0.12, slack: 1.2, tight: 0.8 };
+const work = {
+  capo: 0.1,
+  capoFret: 0.06,
+  capoFretBeyondFive: 0.3,
+  retune: 0.4,
+  retuneSemitone: 0.12,
+  slack: 1.2,
+  tight: 0.8,
+};
 /** What full dislike adds for each capo fret and each semitone of a retune. */
 const dislike = { capoFret: 0.3, retuneSemitone: 3 };
 

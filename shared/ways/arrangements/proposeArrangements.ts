@@ -1,6 +1,5 @@
-import { parseChord } from "../../music/chord";
-import { findShapes } from "../findShapes";
 import { handPath, travelMm, type HandOption } from "../handPath";
+import { allShapes } from "../neck/allShapes";
 import { highestUsedFret } from "../shapeLibrary";
 import { songFlow, type SongFlow } from "../songFlow";
 import type { Shape } from "../way";
@@ -99,11 +98,8 @@ export function proposeArrangements(question: ArrangementQuestion): ArrangementP
 
 /** The shapes of a chord that may be proposed, the plainest first. */
 function optionsOf(played: string, { instrument, capo }: ArrangementQuestion): Option[] {
-  const chord = parseChord(played);
-  if (!chord) return [];
-  const plain = findShapes(chord, instrument, { capo, maxFret: highestUsedFret });
-  const found =
-    plain.length > 0 ? plain : findShapes(chord, instrument, { capo, maxFret: highestUsedFret, bass: false });
+  const within = ({ frets }: Shape) => frets.every((fret) => (fret ?? 0) <= highestUsedFret);
+  const found = allShapes(played, instrument, capo).filter(within);
   const easiest = found[0] ? costOf(found[0]) : 0;
   return found.flatMap((shape): Option[] => {
     const cost = costOf(shape);

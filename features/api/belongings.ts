@@ -26,7 +26,10 @@ export async function readBelongings(): Promise<Belongings> {
   const decided = new Set([...decisions, ...tries, ...lineUps, ...arrangements].map(({ songId }) => songId));
   const untouched = new Set<string>();
   for (const song of songs) if (!decided.has(song.id) && (await deviceShelf.isAsSeeded(song))) untouched.add(song.id);
-  return { items: { voices, takes, songs, decisions, tries, instruments, wishes, "line-ups": lineUps, arrangements }, untouched };
+  return {
+    items: { voices, takes, songs, decisions, tries, instruments, wishes, "line-ups": lineUps, arrangements },
+    untouched,
+  };
 }
 
 /** What the person did on this device, without the demonstration as it came. */

@@ -1,4 +1,4 @@
-import { aDecision, anArrangement, anInstrument, aSong, aTake, aVoice } from "@/__tests__/client/belongings";
+import { aDecision, anInstrument, aSong, aTake, aVoice } from "@/__tests__/client/belongings";
 import { FakeApi } from "@/__tests__/client/fakeApi";
 import { kept, refuseStorage } from "@/__tests__/client/memoryIdb";
 import { countBelongings } from "./belongings";
@@ -55,17 +55,6 @@ it("moves everything in an order in which parents come first, and empties the de
   expect(onDevice()).toEqual([]);
   expect(await shelf.list("takes")).toEqual([take]);
   expect(await shelf.get("decisions", decision.id)).toEqual(decision);
-});
-
-it("moves arrangements behind their song", async () => {
-  const song = aSong();
-  const arrangement = anArrangement(song.id);
-  await shelf.put("songs", song);
-  await shelf.put("arrangements", arrangement);
-  await session.signUp(credentials);
-  expect(await moveIn.afterSignUp()).toMatchObject({ status: "done", moved: 2, stayed: [] });
-  expect(puts()).toEqual([`PUT /songs/${song.id}`, `PUT /arrangements/${arrangement.id}`]);
-  expect(await shelf.list("arrangements")).toEqual([arrangement]);
 });
 
 it("keeps on the device what was not acknowledged, and finishes at the next start", async () => {

@@ -77,10 +77,12 @@ export function ArrangementEditor(props: ArrangementEditorProps) {
     () => weighArrangement({ chords: draft.chords, sequence, instrument, capo: way.capo }),
     [draft.chords, sequence, instrument, way.capo],
   );
-  const plan = useMemo(() => arrangementPlan(draft, on), [draft.chords, draft.pattern, on]);
+  const { chords, pattern } = draft;
+  const plan = useMemo(() => arrangementPlan({ chords, pattern }, on), [chords, pattern, on]);
   const { stop } = desk;
-  useEffect(() => stop, [plan]);
-  const chord = draft.chords.find(({ written }) => written === open);
+  // What is heard is what stands here: a change silences it.
+  useEffect(() => stop, [chords, pattern, stop]);
+  const chord = chords.find(({ written }) => written === open);
   const changed = kept === null || !sameDraft(draft, begin());
   const list = arrangementsPath({ songId: song.id, ...on, instrumentId: instrument.id });
   const save = () => {

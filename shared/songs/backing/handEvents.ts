@@ -1,4 +1,3 @@
-import type { Chord } from "../../music/chord";
 import { tonicPitchClass } from "../../music/keyName";
 import { pitchClass } from "../../music/pitch";
 import type { BackingEvent, ChordInTime } from "./backingPlan";

@@ -1,4 +1,3 @@
-import { View } from "react-native";
 import { Button } from "@/features/ui/Button";
 import { Card } from "@/features/ui/Card";
 import { Heading } from "@/features/ui/Heading";

@@ -4,9 +4,16 @@ import express, { type Express } from "express";
 import type { Logger } from "pino";
 import type { DataSource } from "typeorm";
 import { arrangementsRoutes } from "./arrangements/arrangements.router";
-import { authenticate } from "./auth/accessToken";
+import { adminRoutes } from "./admin/admin.router";
+import { accountRoutes } from "./auth/account.router";
 import { authRoutes } from "./auth/auth.router";
+import { authParts } from "./auth/authParts";
+import { emailRoutes } from "./auth/email.router";
+import { createGuard } from "./auth/guard";
+import { recoveryRoutes } from "./auth/recovery.router";
+import { secondFactorRoutes } from "./auth/secondFactor/secondFactor.router";
 import { chartsRoutes } from "./charts/charts.router";
+import { createPersonalData } from "./createPersonalData";
 import type { Env } from "./env";
 import { Api } from "./http/api";
 import { clientFiles } from "./http/clientFiles";
@@ -39,8 +46,13 @@ export function createApp(dataSource: DataSource, logger: Logger, settings: AppS
   app.use(requestLog(logger));
   app.use(securityHeaders(settings.publicOrigin?.startsWith("https:") ?? false));
 
-  const api = new Api(authenticate(settings.tokenSecret));
-  authRoutes(api, dataSource, settings);
+  const api = new Api(createGuard(dataSource, settings.tokenSecret));
+  const parts = authParts(dataSource, settings);
+  authRoutes(api, parts);
+  recoveryRoutes(api, parts);
+  accountRoutes(api, parts, createPersonalData(dataSource, settings.tokenSecret));
+  emailRoutes(api, parts);
+  secondFactorRoutes(api, parts);
   voicesRoutes(api, dataSource);
   songsRoutes(api, dataSource);
   keysRoutes(api, dataSource);
@@ -51,6 +63,7 @@ export function createApp(dataSource: DataSource, logger: Logger, settings: AppS
   chartsRoutes(api, dataSource);
   mailRoutes(api, dataSource, settings);
   sheetsRoutes(api, dataSource);
+  adminRoutes(api, dataSource, { tokenSecret: settings.tokenSecret, stores: [] });
   healthRoutes(api, dataSource);
   descriptionRoutes(api);
 

@@ -1,10 +1,17 @@
 import { createTransport } from "nodemailer";
 import type { DataSource } from "typeorm";
+import { authParts } from "./auth/authParts";
+import { eraseAccounts, eraseAccountsTask } from "./auth/erasure";
+import { sendReset, sendResetTask } from "./auth/recovery.router";
+import { createPersonalData } from "./createPersonalData";
 import type { JobHandler, Jobs } from "./jobs/jobWorker";
 import { LinkTokensService } from "./mail/linkTokens.service";
 import { sendMailTask } from "./mail/mail.service";
 import { MailPreferencesService } from "./mail/mailPreferences.service";
 import { Postman } from "./mail/postman";
+
+/** Forgets what nobody needs any more. */
+const tidyUpTask = "tidyUp";
 
 interface JobSettings {
   tokenSecret: string;
@@ -33,9 +40,20 @@ export function createJobs(dataSource: DataSource, settings: JobSettings): Jobs 
     tokens: new LinkTokensService(tokenSecret),
     preferences: new MailPreferencesService(dataSource, tokenSecret),
   });
+  const parts = authParts(dataSource, { tokenSecret, publicOrigin: origin });
+  const personalData = createPersonalData(dataSource, tokenSecret);
   const handlers: Record<string, JobHandler> = {
     [sendMailTask]: (payload) => postman.deliver(payload),
+    [sendResetTask]: (payload) => sendReset(parts, payload),
+    [eraseAccountsTask]: () => eraseAccounts(dataSource, personalData, parts.log),
+    [tidyUpTask]: async () => {
+      await parts.log.forgetOld();
+      await parts.tokens.forgetOld(dataSource);
+    },
   };
-  const recurring: { task: string; match: string }[] = [];
+  const recurring = [
+    { task: eraseAccountsTask, match: "7 * * * *" },
+    { task: tidyUpTask, match: "37 3 * * *" },
+  ];
   return { handlers, recurring, close: () => transport.close() };
 }

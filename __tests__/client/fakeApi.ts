@@ -114,7 +114,11 @@ export class FakeApi {
     const person = this.#people.find((each) => each.id === personId);
     return {
       status,
-      body: { accessToken, expiresInS: 600, account: { id: personId, email: person?.email, role: "singer" } },
+      body: {
+        accessToken,
+        expiresInS: 600,
+        account: { id: personId, email: person?.email, role: "singer", confirmed: true, secondFactor: false },
+      },
     };
   }
 

@@ -18,6 +18,7 @@ const names = [
   "PlayerWishes1779000000000",
   "SheetLinks1780000000000",
   "MailAndJobs1782000000000",
+  "Accounts1782100000000",
   "Arrangements1784000000000",
   "LineUps1785000000000",
 ];

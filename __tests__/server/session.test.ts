@@ -1,5 +1,6 @@
 import jwt from "jsonwebtoken";
 import request from "supertest";
+import { signChallenge } from "../../server/auth/accessToken";
 import { cookieOf, password, Person, setCookies, startTestServer, type TestServer, tokenSecret } from "./testServer";
 
 let server: TestServer;
@@ -91,7 +92,7 @@ describe("the refresh token", () => {
 
 describe("the access token", () => {
   const ask = (token: string) => request(server.app).get("/api/account").set("Authorization", token);
-  const claims = (id: string) => ({ sub: id, iss: "larkspan" });
+  const claims = (id: string) => ({ sub: id, sid: id, iss: "larkspan" });
   const encode = (part: object) => Buffer.from(JSON.stringify(part)).toString("base64url");
 
   it("is believed only when this server signed it, by the one algorithm, and it has not expired", async () => {
@@ -102,9 +103,11 @@ describe("the access token", () => {
     const bad = {
       expired: `Bearer ${jwt.sign(claims(id), tokenSecret, { expiresIn: -1 })}`,
       "of another key": `Bearer ${jwt.sign(claims(id), "another secret of the same length, at least")}`,
-      "of another issuer": `Bearer ${jwt.sign({ sub: id, iss: "somebody" }, tokenSecret)}`,
+      "of another issuer": `Bearer ${jwt.sign({ ...claims(id), iss: "somebody" }, tokenSecret)}`,
       "of another algorithm": `Bearer ${jwt.sign(claims(id), tokenSecret, { algorithm: "HS512" })}`,
       unsigned: `Bearer ${encode({ alg: "none", typ: "JWT" })}.${encode({ ...claims(id), exp: soon })}.`,
+      "without a session": `Bearer ${jwt.sign({ sub: id, iss: "larkspan" }, tokenSecret)}`,
+      "of a first step only": `Bearer ${signChallenge(tokenSecret, id)}`,
       "for nobody": `Bearer ${jwt.sign({ iss: "larkspan" }, tokenSecret)}`,
       "for no id": `Bearer ${jwt.sign(claims("1 OR 1=1"), tokenSecret)}`,
       "not a token": "Bearer nonsense",

@@ -16,7 +16,13 @@ it("opens an account, says who is in, and keeps no readable password or token", 
   expect(response.body).toEqual({
     accessToken: expect.stringMatching(/^[\w-]+\.[\w-]+\.[\w-]+$/),
     expiresInS: 600,
-    account: { id: expect.any(String), email: "Maren.Oake@orlow-quay.example", role: "singer" },
+    account: {
+      id: expect.any(String),
+      email: "Maren.Oake@orlow-quay.example",
+      role: "singer",
+      confirmed: false,
+      secondFactor: false,
+    },
   });
   const me = await request(server.app)
     .get("/api/account")
@@ -35,16 +41,17 @@ it("opens an account, says who is in, and keeps no readable password or token", 
 });
 
 it("knows an e-mail address in any case, at sign-in and at sign-up", async () => {
-  await post("sign-up", { email: "nils@orlow-quay.example", password }).expect(201);
-  const taken = await post("sign-up", { email: "NILS@Orlow-Quay.example", password: "another password" }).expect(409);
-  expect(taken.body.code).toBe("email-taken");
+  const first = await post("sign-up", { email: "nils@orlow-quay.example", password }).expect(201);
+  const again = await post("sign-up", { email: "NILS@Orlow-Quay.example", password }).expect(201);
+  expect(again.body.account.id).toBe(first.body.account.id);
   const response = await post("sign-in", { email: "Nils@ORLOW-QUAY.example", password }).expect(200);
   expect(response.body.account.email).toBe("nils@orlow-quay.example");
 });
 
 it("opens one account when the form is sent twice at once", async () => {
   const twice = await Promise.all([1, 2].map(() => post("sign-up", { email: "twice@orlow-quay.example", password })));
-  expect(twice.map(({ status }) => status).sort()).toEqual([201, 409]);
+  expect(twice.map(({ status }) => status).sort()).toEqual([201, 201]);
+  expect(twice[0]?.body.account.id).toBe(twice[1]?.body.account.id);
 });
 
 it("says the same of a wrong password and of an unknown address, after the same work", async () => {
@@ -58,7 +65,7 @@ it("says the same of a wrong password and of an unknown address, after the same 
   expect(unknown.body).toEqual(wrong.body);
   const cost = /^\$argon2id\$v=19\$m=19456,t=2,p=1\$/;
   const work = [expect.stringMatching(cost), "not the password"];
-  expect(verify.mock.calls).toEqual([work, work]);
+  expect(verify.mock.calls).toEqual([work, work, work, work]);
   verify.mockRestore();
 });
 
@@ -104,7 +111,7 @@ it("stops guesses from one address after a hundred, whatever the account", async
 it("does not count right passwords", async () => {
   const { email } = await Person.signUp(server.app);
   for (let k = 0; k < 12; k++) await post("sign-in", { email, password }).expect(200);
-  const counted = await server.database.query("SELECT key FROM tries WHERE points > 0 AND key NOT LIKE 'sign-up:%'");
+  const counted = await server.database.query("SELECT key FROM tries WHERE points > 0 AND key NOT LIKE 'sign-up%'");
   expect(counted).toEqual([]);
 });
 

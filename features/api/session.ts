@@ -30,7 +30,7 @@ function visitor(ended: boolean): Session {
 
 function signedIn(answer: SessionResponse): Session {
   sessionHint.set();
-  const same = current.account?.id === answer.account.id && current.account.role === answer.account.role;
+  const same = JSON.stringify(current.account) === JSON.stringify(answer.account);
   return same ? current : publish({ status: "signed-in", account: answer.account, ended: false, problem: null });
 }
 

@@ -1,8 +1,9 @@
-import type { Response } from "express";
-import type { DataSource } from "typeorm";
+import type { Request, Response } from "express";
 import {
   account,
-  type Account,
+  challengeResponse,
+  type ChallengeResponse,
+  secondStepRequest,
   sessionResponse,
   type SessionResponse,
   signInRequest,
@@ -12,39 +13,66 @@ import type { Api } from "../http/api";
 import { currentUserId } from "../http/currentUser";
 import { HttpProblem, noSession } from "../http/httpProblem";
 import { parse } from "../http/parse";
-import { accessTokenLifeS, signAccessToken } from "./accessToken";
-import { AccountsService } from "./accounts.service";
+import { accessTokenLifeS, challengeLifeS, readChallenge, signAccessToken, signChallenge } from "./accessToken";
+import { toAccount } from "./accounts.service";
+import { addressOf, type AuthParts, deviceOf, tellOwner } from "./authParts";
+import { cancelErasure } from "./erasure";
+import { suspended } from "./guard";
+import { refuseCommonPassword } from "./newPassword";
 import { sameOrigin } from "./sameOrigin";
 import { SessionCookie } from "./sessionCookie";
-import { SessionsService } from "./sessions.service";
-import { TryLimits } from "./tryLimits";
-
-interface AuthSettings {
-  tokenSecret: string;
-  publicOrigin: string | null;
-}
+import type { Begun } from "./sessions.service";
 
 const tag = "account";
 const session = { name: "Session", schema: sessionResponse };
-const isTaken = { description: "There is an account with this address (email-taken)." };
 const tooMany = { description: "Tried too often (too-many-tries); Retry-After tells the seconds to wait." };
 const otherOrigin = { description: "The request came from a page of another site (other-origin)." };
+const challenge = {
+  description: "The password is right; a code is needed as well. Send the challenge with it to /auth/second-step.",
+  schema: { name: "Challenge", schema: challengeResponse },
+};
+
+type Asked = Request<Record<string, string>>;
 
 /** Opening an account, signing in and out, and keeping a session alive. */
-export function authRoutes(api: Api, dataSource: DataSource, { tokenSecret, publicOrigin }: AuthSettings): void {
-  const accounts = new AccountsService(dataSource);
-  const sessions = new SessionsService(dataSource);
-  const limits = new TryLimits(dataSource);
+export function authRoutes(api: Api, parts: AuthParts): void {
+  const { accounts, sessions, secondFactors, limits, log, dataSource } = parts;
+  const { tokenSecret, publicOrigin } = parts.settings;
   const cookie = new SessionCookie(publicOrigin?.startsWith("https:") ?? false);
 
-  const answer = (res: Response, status: number, person: Account, refreshToken: string) => {
-    cookie.write(res, refreshToken);
+  const answer = async (res: Response, status: number, { userId, sessionId, token }: Begun) => {
+    const person = await accounts.person(userId);
+    if (person.suspended) throw suspended();
+    cookie.write(res, token);
     const body: SessionResponse = {
-      accessToken: signAccessToken(tokenSecret, person.id),
+      accessToken: signAccessToken(tokenSecret, userId, sessionId),
       expiresInS: accessTokenLifeS,
-      account: person,
+      account: toAccount(person),
     };
     res.status(status).json(body);
+  };
+
+  /** After a right password: a session, or the question for a code. */
+  const letIn = async (
+    req: Asked,
+    res: Response,
+    status: number,
+    person: Awaited<ReturnType<typeof accounts.person>>,
+  ) => {
+    if (person.suspended) throw suspended();
+    if (person.secondFactor) {
+      const body: ChallengeResponse = { challenge: signChallenge(tokenSecret, person.id), expiresInS: challengeLifeS };
+      res.status(202).json(body);
+      return;
+    }
+    await beginSession(req, res, status, person.id);
+  };
+
+  const beginSession = async (req: Asked, res: Response, status: number, userId: string) => {
+    const address = addressOf(req);
+    if (await cancelErasure(dataSource, userId)) await log.note("erasure-cancelled", { userId, address });
+    await log.note("signed-in", { userId, address });
+    await answer(res, status, await sessions.begin(userId, deviceOf(req)));
   };
 
   api.router.use("/auth", sameOrigin(publicOrigin));
@@ -54,21 +82,23 @@ export function authRoutes(api: Api, dataSource: DataSource, { tokenSecret, publ
       method: "post",
       path: "/auth/sign-up",
       tag,
-      summary: "Open an account and begin a session",
+      summary: "Open an account and begin a session; answers the same whether or not the address is known",
       signedIn: false,
       body: { name: "SignUp", schema: signUpRequest },
       answers: {
         201: { description: "Opened; the refresh token is in a cookie.", schema: session },
+        202: challenge,
         403: otherOrigin,
-        409: isTaken,
         429: tooMany,
       },
     },
     async (req, res) => {
       const { email, password } = parse(signUpRequest, req.body);
-      await limits.countSignUp(req.ip ?? "");
-      const person = await accounts.open(email, password);
-      answer(res, 201, person, await sessions.begin(person.id));
+      refuseCommonPassword(password, email);
+      await limits.countSignUp(email, addressOf(req));
+      const { person, isNew } = await accounts.open(email, password);
+      if (isNew) await log.note("signed-up", { userId: person.id, address: addressOf(req) });
+      await letIn(req, res, 201, person);
     },
   );
 
@@ -77,25 +107,69 @@ export function authRoutes(api: Api, dataSource: DataSource, { tokenSecret, publ
       method: "post",
       path: "/auth/sign-in",
       tag,
-      summary: "Begin a session",
+      summary: "Begin a session; keeps an account that was to be erased",
       signedIn: false,
       body: { name: "SignIn", schema: signInRequest },
       answers: {
         200: { description: "Signed in; the refresh token is in a cookie.", schema: session },
+        202: challenge,
         401: { description: "Address or password is wrong (wrong-credentials)." },
-        403: otherOrigin,
+        403: { description: "From another site (other-origin), or the account is suspended (suspended)." },
         429: tooMany,
       },
     },
     async (req, res) => {
       const { email, password } = parse(signInRequest, req.body);
-      const address = req.ip ?? "";
+      const address = addressOf(req);
       await limits.countSignIn(email, address);
       const person = await accounts.recognise(email, password);
-      if (!person)
+      if (!person) {
+        await log.note("sign-in-refused", { userId: null, address });
         throw new HttpProblem(401, "wrong-credentials", "This e-mail address and password do not belong together.");
+      }
       await limits.forgiveSignIn(email, address);
-      answer(res, 200, person, await sessions.begin(person.id));
+      await letIn(req, res, 200, person);
+    },
+  );
+
+  api.route(
+    {
+      method: "post",
+      path: "/auth/second-step",
+      tag,
+      summary: "The second step of signing in: a code of the app, or a recovery code",
+      signedIn: false,
+      body: { name: "SecondStep", schema: secondStepRequest },
+      answers: {
+        200: { description: "Signed in; the refresh token is in a cookie.", schema: session },
+        401: {
+          description: "The challenge is too old (challenge-expired), or the code is wrong or used (wrong-code).",
+        },
+        403: { description: "From another site (other-origin), or the account is suspended (suspended)." },
+        429: tooMany,
+      },
+    },
+    async (req, res) => {
+      const asked = parse(secondStepRequest, req.body);
+      const address = addressOf(req);
+      const userId = readChallenge(asked.challenge, tokenSecret);
+      if (!userId) throw new HttpProblem(401, "challenge-expired", "That took too long. Type your password again.");
+      await limits.countCode(userId, address);
+      const used = await secondFactors.use(userId, asked.code);
+      if (!used) {
+        await log.note("second-step-refused", { userId, address });
+        throw new HttpProblem(401, "wrong-code", "This code is not right, or it was used already.", [
+          { path: "code", message: "This code is not right, or it was used already." },
+        ]);
+      }
+      await limits.forgiveCode(userId, address);
+      const person = await accounts.person(userId);
+      if (person.suspended) throw suspended();
+      if (used === "recovery") {
+        await log.note("recovery-code-used", { userId, address });
+        await tellOwner(dataSource, person, "recovery-code-used");
+      }
+      await beginSession(req, res, 200, userId);
     },
   );
 
@@ -116,8 +190,7 @@ export function authRoutes(api: Api, dataSource: DataSource, { tokenSecret, publ
       const token = cookie.read(req);
       if (!token) throw noSession();
       try {
-        const next = await sessions.rotate(token);
-        answer(res, 200, await accounts.get(next.userId), next.token);
+        await answer(res, 200, await sessions.rotate(token));
       } catch (error) {
         if (error instanceof HttpProblem) cookie.clear(res);
         throw error;

@@ -12,6 +12,7 @@ import { TakeEntity } from "../voices/take.entity";
 import { VoiceEntity } from "../voices/voice.entity";
 import { PlayerWishesEntity } from "../ways/playerWishes.entity";
 import { Arrangements1784000000000 } from "./migrations/Arrangements1784000000000";
+import { Accounts1782100000000 } from "./migrations/Accounts1782100000000";
 import { FirstTables1764547200000 } from "./migrations/FirstTables1764547200000";
 import { InstrumentPhotos1778000000000 } from "./migrations/InstrumentPhotos1778000000000";
 import { KeysPerVoice1775001600000 } from "./migrations/KeysPerVoice1775001600000";
@@ -81,9 +82,10 @@ export function createMigrationSource(url: string): DataSource {
       KeysPerVoice1775001600000,
       InstrumentPhotos1778000000000,
       PlayerWishes1779000000000,
-      MailAndJobs1782000000000,
-      Arrangements1784000000000,
       SheetLinks1780000000000,
+      MailAndJobs1782000000000,
+      Accounts1782100000000,
+      Arrangements1784000000000,
       LineUps1785000000000,
     ],
     migrationsTransactionMode: "all",

@@ -58,7 +58,13 @@ export async function demoSignIns(dataSource: DataSource): Promise<DemoSignIn[]>
 /** Brings one person in, with everything that is theirs. */
 async function move(manager: EntityManager, person: DemoPerson, passwordHash: string): Promise<void> {
   const userId = randomUUID();
-  await manager.insert(UserEntity, { id: userId, email: person.email, passwordHash, role: person.role });
+  await manager.insert(UserEntity, {
+    id: userId,
+    email: person.email,
+    passwordHash,
+    role: person.role,
+    confirmedAt: new Date(),
+  });
 
   const createdAt = person.takes[0]?.sungAt ?? "";
   const voice: Voice = { id: randomUUID(), name: person.voice, byHand: null, createdAt };

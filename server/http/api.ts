@@ -32,17 +32,24 @@ export interface Operation {
   answers: Readonly<Record<number, Answer>>;
 }
 
+/** What stands in front of an operation: whom it lets through. */
+export type Guard = (operation: { id: string; signedIn: boolean }) => RequestHandler[];
+
+/** The name of an operation: its method and the words of its path, such as "putSongsId". */
+export function operationId({ method, path }: Pick<Operation, "method" | "path">): string {
+  return `${method}${path.replace(/[/:.-]+(\w)/g, (_, letter: string) => letter.toUpperCase())}`;
+}
+
 /** Collects routes together with their description, so that neither exists without the other. */
 export class Api {
   readonly router = Router();
   readonly operations: Operation[] = [];
 
-  constructor(private readonly authenticate: RequestHandler) {}
+  constructor(private readonly guard: Guard) {}
 
   route(operation: Operation, handler: RequestHandler<Record<string, string>>): void {
     this.operations.push(operation);
-    const before: RequestHandler[] = [];
-    if (operation.signedIn) before.push(this.authenticate);
+    const before = this.guard({ id: operationId(operation), signedIn: operation.signedIn });
     if (operation.body) before.push(requireJson);
     this.router[operation.method](operation.path, ...before, handler as RequestHandler);
   }

@@ -11,3 +11,14 @@ export function currentUserId(res: Response): string {
 export function setCurrentUserId(res: Response, id: string): void {
   res.locals.userId = id;
 }
+
+/** The session by which they ask. */
+export function currentSessionId(res: Response): string {
+  const id: unknown = res.locals.sessionId;
+  if (typeof id !== "string") throw noSession();
+  return id;
+}
+
+export function setCurrentSessionId(res: Response, id: string): void {
+  res.locals.sessionId = id;
+}

@@ -1,6 +1,6 @@
 import { z } from "zod";
 import { problem } from "../../shared/contract/problem";
-import type { Answer, NamedSchema, Operation } from "./api";
+import { type Answer, type NamedSchema, type Operation, operationId } from "./api";
 
 type Json = Record<string, unknown>;
 
@@ -65,7 +65,7 @@ export function openApiDocument(operations: readonly Operation[]): OpenApiDocume
     });
     const parameters = [...pathParameters(operation), ...queryParameters(operation)];
     return {
-      operationId: `${operation.method}${operation.path.replace(/[/:-]+(\w)/g, (_, letter: string) => letter.toUpperCase())}`,
+      operationId: operationId(operation),
       tags: [operation.tag],
       summary: operation.summary,
       security: operation.signedIn ? [{ accessToken: [] }] : [],

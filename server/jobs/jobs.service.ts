@@ -27,3 +27,24 @@ export async function enqueue(
     [task, JSON.stringify(payload), key ?? null, runAt?.toISOString() ?? null, maxAttempts],
   );
 }
+/** How the queue is, in numbers. */
+export interface QueueHealth {
+  waiting: number;
+  /** failed at least once and to be tried again */
+  retrying: number;
+  /** given up */
+  failed: number;
+  /** how long the job that waits longest has been due */
+  oldestDueS: number;
+}
+
+export async function queueHealth(dataSource: DataSource): Promise<QueueHealth> {
+  const rows: QueueHealth[] = await dataSource.query(
+    `SELECT count(*) FILTER (WHERE attempts = 0)::int AS waiting,
+            count(*) FILTER (WHERE attempts > 0 AND attempts < max_attempts)::int AS retrying,
+            count(*) FILTER (WHERE attempts >= max_attempts)::int AS failed,
+            coalesce(extract(epoch FROM now() - min(run_at) FILTER (WHERE attempts < max_attempts AND run_at <= now())), 0)::float8 AS "oldestDueS"
+     FROM ${jobsSchema}.jobs`,
+  );
+  return rows[0] ?? { waiting: 0, retrying: 0, failed: 0, oldestDueS: 0 };
+}

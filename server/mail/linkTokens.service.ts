@@ -68,6 +68,12 @@ export class LinkTokensService {
     return rows[0] ?? null;
   }
 
+  /** Links that are long over, and the ledger of mails of more than a year ago. */
+  async forgetOld(connection: Connection): Promise<void> {
+    await connection.query("DELETE FROM link_tokens WHERE expires_at < now() - interval '30 days'");
+    await connection.query("DELETE FROM sent_mails WHERE at < now() - interval '1 year'");
+  }
+
   /** What a token stands for, without using it up. */
   async look(connection: Connection, purpose: string, token: string): Promise<SpentToken | null> {
     const rows: SpentToken[] = await connection.query(

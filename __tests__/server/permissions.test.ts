@@ -1,0 +1,142 @@
+import request from "supertest";
+import { type Permission, permissions } from "../../server/auth/permissions";
+import type { DescribedOperation } from "../../server/http/openApi";
+import { fixtures } from "./permissionFixtures";
+import { Person, startTestServer, type TestServer } from "./testServer";
+
+interface Route {
+  id: string;
+  method: "get" | "post" | "put" | "delete";
+  path: string;
+  guarded: boolean;
+  permission: Permission;
+}
+
+const kinds = ["visitor", "singer", "teacher", "admin", "admin without codes", "unconfirmed", "suspended"] as const;
+type Kind = (typeof kinds)[number];
+
+let server: TestServer;
+let routes: Route[];
+beforeAll(async () => {
+  server = await startTestServer();
+  const { body } = await request(server.app).get("/api/openapi.json").expect(200);
+  const paths = (body as { paths: Record<string, Record<string, DescribedOperation>> }).paths;
+  routes = Object.entries(paths).flatMap(([path, methods]) =>
+    Object.entries(methods).map(([method, { operationId: id, security }]) => ({
+      id,
+      method: method as Route["method"],
+      path,
+      guarded: security.length > 0,
+      permission: permissions[id] as Permission,
+    })),
+  );
+});
+afterAll(() => server.close());
+beforeEach(() => server.database.query("DELETE FROM tries"));
+
+/** Somebody of this kind; a visitor is nobody. */
+async function somebody(kind: Kind): Promise<Person | null> {
+  if (kind === "visitor") return null;
+  const role = kind.startsWith("admin") ? "admin" : kind === "teacher" ? "teacher" : "singer";
+  const person = await Person.put(server, role, kind !== "unconfirmed");
+  if (kind === "admin") {
+    await server.database.query(
+      "INSERT INTO second_factors (user_id, secret, confirmed_at) VALUES ($1, 'unused', now())",
+      [person.id],
+    );
+  }
+  return person;
+}
+
+const suspend = (person: Person) =>
+  server.database.query("UPDATE users SET suspended_at = now() WHERE id = $1", [person.id]);
+
+/** The status of refusal that the table demands; null where the person is let through. */
+function refusal(kind: Kind, { who, confirmed }: Permission): number | null {
+  if (who === "visitor") return null;
+  if (kind === "visitor") return 401;
+  if (kind === "suspended") return 403;
+  if (who !== "person") {
+    const role = kind === "teacher" || kind === "admin" ? kind : kind.startsWith("admin") ? "admin" : "singer";
+    if (!who.includes(role) || kind === "admin without codes") return 403;
+  }
+  return confirmed && kind === "unconfirmed" ? 403 : null;
+}
+
+const fill = (path: string, ids: Record<string, string>) =>
+  `/api${path.replace(/\{(\w+)\}/g, (_, name: string) => ids[name] ?? "missing")}`;
+
+async function ask(person: Person | null, { method, path }: Route, ids: Record<string, string>, body?: object) {
+  const asking = request(server.app)[method](fill(path, ids));
+  if (person) asking.set("Authorization", `Bearer ${person.token}`);
+  return method === "get" ? asking : asking.send(body ?? {});
+}
+
+const makerOf = (path: string) => {
+  const [prefix] = Object.keys(fixtures)
+    .filter((beginning) => path.startsWith(beginning))
+    .sort((a, b) => b.length - a.length);
+  if (prefix === undefined)
+    throw new Error(`No fixture says what the ids of ${path} can name (permissionFixtures.ts).`);
+  return fixtures[prefix]!;
+};
+
+it("every route is classified, and no entry stands for a route that is gone", () => {
+  expect(routes.length).toBeGreaterThan(60);
+  expect(routes.map(({ id }) => id).sort()).toEqual(Object.keys(permissions).sort());
+  for (const { id, path, guarded, permission } of routes) {
+    expect([id, permission.who !== "visitor"]).toEqual([id, guarded]);
+    expect([id, permission.object !== "none"]).toEqual([id, path.includes("{")]);
+  }
+});
+
+describe.each(kinds)("for somebody who is %s", (kind) => {
+  it("every route without an id answers as the table says", async () => {
+    for (const route of routes.filter(({ permission }) => permission.object === "none")) {
+      const person = await somebody(kind);
+      if (person && kind === "suspended") await suspend(person);
+      const { status, body } = await ask(person, route, {});
+      const expected = refusal(kind, route.permission);
+      if (expected !== null) expect([route.id, status]).toEqual([route.id, expected]);
+      else {
+        // Let through, it may find fault with what was sent, but never with who sends it.
+        expect([route.id, status < 500, ["not-allowed", "suspended", "unconfirmed"].includes(body.code)]).toEqual([
+          route.id,
+          true,
+          false,
+        ]);
+        if (person && route.permission.who !== "visitor") expect([route.id, status]).not.toEqual([route.id, 401]);
+      }
+    }
+  }, 240_000);
+
+  it("every route with an id answers as the table says of one's own, another's and nobody's thing", async () => {
+    const owner = (await somebody("singer"))!;
+    for (const route of routes.filter(({ permission }) => permission.object !== "none")) {
+      const maker = makerOf(route.path);
+      const person = await somebody(kind);
+      const things = {
+        own: await maker.make(person ?? owner),
+        foreign: await maker.make(owner),
+        absent: await maker.absent(person ?? owner),
+      };
+      if (person && kind === "suspended") await suspend(person);
+      // One's own last: it may be gone, or the session with it.
+      for (const which of ["foreign", "absent", "own"] as const) {
+        const { ids, body } = things[which];
+        const { status } = await ask(person, route, ids, body);
+        const what = [route.id, which];
+        const expected = refusal(kind, route.permission);
+        const { object } = route.permission;
+        if (expected !== null) expect([...what, status]).toEqual([...what, expected]);
+        else if (which === "absent" && object === "own-or-new") expect([...what, status]).toEqual([...what, 201]);
+        else if (which === "absent") expect([...what, status]).toEqual([...what, 404]);
+        else if (which === "foreign" && object !== "any" && object !== "link")
+          expect([...what, status]).toEqual([...what, 404]);
+        // Administrators leave their own account to others.
+        else if (which === "own" && object === "any") expect([...what, status]).toEqual([...what, 409]);
+        else expect([...what, status < 300]).toEqual([...what, true]);
+      }
+    }
+  }, 240_000);
+});

@@ -22,6 +22,10 @@ export interface SheetChoicesProps {
   ways: readonly Offer[];
   wayNow: string;
   onWay: (value: string) => void;
+  /** kept arrangements of this way, the way's own shapes first; none where there are none */
+  arrangements: readonly Offer[];
+  arrangementNow: string;
+  onArrangement: (value: string) => void;
   /** which instrument */
   chooser: ReactNode;
 }
@@ -36,6 +40,7 @@ const letters = [
 /** What is played on what, and how it stands on the paper. */
 export function SheetChoices(props: SheetChoicesProps) {
   const { options, onChange, keys, keyNow, onKey, ways, wayNow, onWay, chooser } = props;
+  const { arrangements, arrangementNow, onArrangement } = props;
   return (
     <View style={{ gap: 16 }} testID="sheet-choices">
       {keys.length > 0 && (
@@ -47,6 +52,15 @@ export function SheetChoices(props: SheetChoicesProps) {
       {ways.length > 0 && (
         <>
           <Select label="Way to play it" options={ways} value={wayNow} onChange={onWay} testID="sheet-way" />
+          {arrangements.length > 0 && (
+            <Select
+              label="Arrangement"
+              options={arrangements}
+              value={arrangementNow}
+              onChange={onArrangement}
+              testID="sheet-arrangement"
+            />
+          )}
           <Labelled words="Chord names">
             <Segmented
               label="Chord names"

@@ -6,37 +6,28 @@ import { keyFifths, type KeyName } from "@/shared/music/keyName";
 import { keySign, movedKey } from "@/shared/music/keyWords";
 import { shortMove } from "@/shared/music/moveWords";
 import { glyphs, noteName } from "@/shared/music/pitch";
-import type { Sheet } from "@/shared/sheets/sheet";
+import type { Sheet, SheetStrokes } from "@/shared/sheets/sheet";
 import { chartChords, parseChart } from "@/shared/songs/chart";
-import type { Way } from "@/shared/ways/way";
-
-type Moves = Pick<Way, "retune" | "capo" | "shapeKey">;
+import type { WayAddress, WayMoves } from "@/shared/ways/askedWay";
+import type { Shape, Way } from "@/shared/ways/way";
 
 /** What an address may ask for. All of it as it stands there. */
-export interface SheetParams {
+export interface SheetParams extends WayAddress {
   key?: string;
   shift?: string;
   instrument?: string;
-  retune?: string;
-  capo?: string;
-  shapes?: string;
+  /** id of a kept arrangement */
+  arrangement?: string;
 }
 
-/** An address's part for a way of playing. */
-export function wayParams({ retune, capo, shapeKey }: Moves) {
-  return { retune: String(retune), capo: String(capo), shapes: shapeKey };
-}
-
-/** The way that the address asks for, else the one kept with the decision, else the best; null where there is none. */
-export function chosenWay(ways: readonly Way[], asked: SheetParams, kept: Moves | null): Way | null {
-  const is = (want: Moves) => (way: Way) =>
-    way.retune === want.retune && way.capo === want.capo && way.shapeKey === want.shapeKey;
-  const { retune, capo, shapes } = asked;
-  const wanted =
-    retune !== undefined && capo !== undefined && shapes !== undefined
-      ? ways.find(is({ retune: Number(retune), capo: Number(capo), shapeKey: shapes }))
-      : undefined;
-  return wanted ?? (kept ? ways.find(is(kept)) : undefined) ?? ways[0] ?? null;
+/** A kept arrangement as a sheet takes it. */
+export interface SheetArrangement {
+  id: string;
+  name: string;
+  /** what it was made for: it stands on no other way's sheet */
+  way: WayMoves;
+  chords: readonly { written: string; shape: Shape | null }[];
+  strokes: SheetStrokes;
 }
 
 /** All twelve keys, each as near as may be to the one that the sheet began with. */
@@ -58,10 +49,12 @@ export interface SheetParts {
   instrument: Instrument;
   /** null while ways are searched, and where there are none */
   way: Way | null;
+  /** whose shapes and strokes it shows; null for the way's own */
+  arrangement: SheetArrangement | null;
 }
 
 /** Everything that stands on the paper. */
-export function sheetOf({ song, key, shift, singer, instrument, way }: SheetParts): Sheet {
+export function sheetOf({ song, key, shift, singer, instrument, way, arrangement }: SheetParts): Sheet {
   const from = key && writtenKey(song);
   const first = song.tune?.kind === "melody" ? song.tune.notes[0] : undefined;
   const strings = instrument.strings.map(({ note }) => note);
@@ -86,8 +79,11 @@ export function sheetOf({ song, key, shift, singer, instrument, way }: SheetPart
         capo: way.capo,
         shapeKey: { tonic: way.shapeKey, mode: key.mode },
       },
-    chords: way ? way.chords.map(({ written, sounding, played, shape }) => ({ written, sounding, played, shape })) : [],
-    strokes: null,
+    chords: (way?.chords ?? []).map(({ written, sounding, played, shape }) => {
+      const arranged = arrangement?.chords.find((chord) => chord.written === written);
+      return { written, sounding, played, shape: arranged ? arranged.shape : shape };
+    }),
+    strokes: arrangement?.strokes ?? null,
   };
 }
 

@@ -2,8 +2,9 @@ import { useMemo } from "react";
 import type { Song } from "@/shared/contract/song";
 import type { Instrument } from "@/shared/instruments/instrument";
 import type { KeyName } from "@/shared/music/keyName";
+import { askedWay, wayAddress, type WayMoves } from "@/shared/ways/askedWay";
 import type { Way } from "@/shared/ways/way";
-import { chosenWay, keyChoices, sheetOf, wayParams, writtenKey, type SheetParams } from "./sheetInHand";
+import { keyChoices, sheetOf, writtenKey, type SheetArrangement, type SheetParams } from "./sheetInHand";
 
 export interface SheetInHandOptions {
   song: Song;
@@ -14,28 +15,32 @@ export interface SheetInHandOptions {
   /** best first; undefined while they are searched */
   ways: readonly Way[] | undefined;
   asked: SheetParams;
-  kept: Pick<Way, "retune" | "capo" | "shapeKey"> | null;
+  kept: WayMoves | null;
+  /** kept arrangements of the song in this key on this instrument */
+  arrangements?: readonly SheetArrangement[];
   /** changes what the address asks for */
   ask: (change: SheetParams) => void;
 }
 
 /** The sheet of a song in a key on an instrument, and what may be chosen instead. */
 export function useSheetInHand(from: SheetInHandOptions) {
-  const { song, key, shift, singer, instrument, ways, asked, kept, ask } = from;
-  const way = useMemo(() => chosenWay(ways ?? [], asked, kept), [ways, asked, kept]);
+  const { song, key, shift, singer, instrument, ways, asked, kept, arrangements = [], ask } = from;
+  const way = useMemo(() => askedWay(ways ?? [], asked, kept), [ways, asked, kept]);
+  const fitting = way ? arrangements.filter((each) => idOf(each.way) === idOf(way)) : [];
+  const arrangement = fitting.find(({ id }) => id === asked.arrangement) ?? null;
   const written = writtenKey(song);
   const keyed = written !== null;
   const { tonic, mode } = key;
   const sheet = useMemo(() => {
     const sounding = keyed ? { tonic, mode } : null;
-    return sheetOf({ song, key: sounding, shift, singer, instrument, way });
-  }, [song, keyed, tonic, mode, shift, singer, instrument, way]);
+    return sheetOf({ song, key: sounding, shift, singer, instrument, way, arrangement });
+  }, [song, keyed, tonic, mode, shift, singer, instrument, way, arrangement]);
   const keys = written === null ? [] : keyChoices(written, shift);
-  const idOf = (each: Pick<Way, "retune" | "capo" | "shapeKey">) => Object.values(wayParams(each)).join(" ");
   const now = {
     ...(written === null ? null : { key: tonic, shift: String(shift) }),
     instrument: instrument.id,
-    ...(way ? wayParams(way) : null),
+    ...(way ? wayAddress(way) : null),
+    ...(arrangement ? { arrangement: arrangement.id } : null),
   };
   return {
     sheet,
@@ -53,11 +58,31 @@ export function useSheetInHand(from: SheetInHandOptions) {
       wayNow: way ? idOf(way) : "",
       onWay: (value: string) => {
         const chosen = ways?.find((each) => idOf(each) === value);
-        if (chosen) ask(wayParams(chosen));
+        if (chosen) ask({ ...wayAddress(chosen), ...noArrangement });
       },
+      arrangements:
+        fitting.length === 0
+          ? []
+          : [
+              { value: "", label: "The way's own shapes" },
+              ...fitting.map(({ id, name }) => ({ value: id, label: name })),
+            ],
+      arrangementNow: arrangement?.id ?? "",
+      onArrangement: (id: string) => ask(id === "" ? noArrangement : { arrangement: id }),
     },
   };
 }
 
+function idOf(way: WayMoves): string {
+  return Object.values(wayAddress(way)).join(" ");
+}
+
+const noArrangement = { arrangement: undefined } as unknown as SheetParams;
+
 /** In another key or on another instrument the way is found anew. */
-const noWay = { retune: undefined, capo: undefined, shapes: undefined } as unknown as SheetParams;
+const noWay = {
+  retune: undefined,
+  capo: undefined,
+  shapes: undefined,
+  arrangement: undefined,
+} as unknown as SheetParams;

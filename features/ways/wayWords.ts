@@ -24,11 +24,6 @@ export function shortWay({ retune, capo, shapeKey }: Omit<Moves, "kind">): strin
   return capo === 0 ? `Retuned ${retuned}, ${shapes}` : `Retuned ${retuned}, capo ${capo}, ${shapes}`;
 }
 
-/** What is done to the instrument, in a sentence: "Capo 3, shapes in A." */
-export function wayPlace(moves: Pick<Way, "retune" | "capo" | "shapeKey">): string {
-  return `${shortWay(moves)}.`;
-}
-
 /** How hard, in a word. */
 export function difficultyWord(difficulty: number): string {
   if (difficulty < 0.34) return "easy";

@@ -16,6 +16,8 @@ export const clientRoutes = [
   "/songs/:id/compare",
   "/songs/:id/together",
   "/songs/:id/ways",
+  "/songs/:id/arrangements",
+  "/songs/:id/arrangements/:arrangement",
   "/songs/:id/why",
   "/songs/:id/everyone",
   "/songs/:id/melody",
@@ -39,9 +41,12 @@ export const clientRoutes = [
 const id = "[0-9a-fA-F]{8}(?:-[0-9a-fA-F]{4}){3}-[0-9a-fA-F]{12}";
 /** What cannot be a link gets the same page, which then says so. */
 const token = "[^/]{1,200}";
-const patterns = clientRoutes.map(
-  (route) => new RegExp(`^${route.replaceAll(":id", id).replaceAll(":token", token)}/?$`),
-);
+/** A kept one by its id, a proposed one by what it is: "closest", "root-2". */
+const arrangement = `(?:${id}|[a-z]+(?:-[0-9]{1,2})?)`;
+const patterns = clientRoutes.map((route) => {
+  const pattern = route.replaceAll(":id", id).replaceAll(":token", token).replaceAll(":arrangement", arrangement);
+  return new RegExp(`^${pattern}/?$`);
+});
 
 export function isClientRoute(path: string): boolean {
   return patterns.some((pattern) => pattern.test(path));

@@ -13,6 +13,7 @@ import { useSheetInHand } from "@/features/sheets/useSheetInHand";
 import { SongState } from "@/features/songs/SongState";
 import { songQueries } from "@/features/songs/songQueries";
 import { useSingingVoice } from "@/features/voice/useSingingVoice";
+import { useSheetArrangements } from "@/features/ways/arrangements/useSheetArrangements";
 import { wayQueries } from "@/features/ways/wayQueries";
 import { useWishes } from "@/features/ways/wishes/useWishes";
 import type { Song } from "@/shared/contract/song";
@@ -41,6 +42,7 @@ function SongSheet({ song }: { song: Song }) {
     singer: singer.voice?.name ?? null,
     ways: found.data,
     kept: mine?.instrument === instrument.id ? mine.way : null,
+    arrangements: useSheetArrangements(song, shift, instrument),
     ask: (change) => router.setParams(change as Record<string, string>),
   });
   return (

@@ -10,6 +10,7 @@ import { useSheetInHand } from "@/features/sheets/useSheetInHand";
 import { SongState } from "@/features/songs/SongState";
 import { songQueries } from "@/features/songs/songQueries";
 import { useSingingVoice } from "@/features/voice/useSingingVoice";
+import { useSheetArrangements } from "@/features/ways/arrangements/useSheetArrangements";
 import { wayQueries } from "@/features/ways/wayQueries";
 import { useWishes } from "@/features/ways/wishes/useWishes";
 import type { Song } from "@/shared/contract/song";
@@ -37,6 +38,7 @@ function Stage({ song }: { song: Song }) {
     singer: null,
     ways: found.data,
     kept: mine?.instrument === instrument.id ? mine.way : null,
+    arrangements: useSheetArrangements(song, shift, instrument),
     ask: () => undefined,
   });
   const notes = song.tune?.kind === "melody" ? song.tune.notes : null;

@@ -7,11 +7,11 @@ import { useInstrument, useInstrumentNames } from "@/features/instruments/useIns
 import { DecisionCard } from "@/features/keys/decision/DecisionCard";
 import { askedKey } from "@/features/keys/songKeys";
 import { decidedHere, useSongKeys } from "@/features/keys/useSongKeys";
-import { wayParams } from "@/features/sheets/sheetInHand";
 import { MovedChart } from "@/features/songs/MovedChart";
 import { SongState } from "@/features/songs/SongState";
 import { songQueries } from "@/features/songs/songQueries";
 import { useSingingVoice } from "@/features/voice/useSingingVoice";
+import { wayLinks } from "@/features/ways/arrangements/arrangementPaths";
 import { WayPane } from "@/features/ways/WayPane";
 import { wayQueries } from "@/features/ways/wayQueries";
 import { ticksOn } from "@/features/ways/wishes/shapeTicks";
@@ -21,6 +21,7 @@ import { WishPanel } from "@/features/ways/wishes/WishPanel";
 import type { Song } from "@/shared/contract/song";
 import { keySign } from "@/shared/music/keyWords";
 import { glyphs } from "@/shared/music/pitch";
+import { wayAddress } from "@/shared/ways/askedWay";
 
 export default function WaysRoute() {
   const { id } = useLocalSearchParams<{ id: string }>();
@@ -52,9 +53,10 @@ function Ways({ song }: { song: Song }) {
       full
       ticks={ticking ? ticksOn(instrument, wishes, keepWishes) : undefined}
       onUse={(way) => keys.take({ tonic: key.tonic, shift, instrument: instrument.id, way }, settle)}
+      links={wayLinks({ songId: song.id, tonic: key.tonic, shift, instrumentId: instrument.id })}
       sheet={(way) => ({
         pathname: "/songs/[id]/sheet",
-        params: { id: song.id, key: key.tonic, shift, instrument: instrument.id, ...wayParams(way) },
+        params: { id: song.id, key: key.tonic, shift, instrument: instrument.id, ...wayAddress(way) },
       })}
     >
       {(parts) => (

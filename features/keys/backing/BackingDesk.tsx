@@ -9,38 +9,26 @@ export interface Desk {
   possible: boolean;
   /** which plan is heard; null for silence */
   heard: string | null;
-  /** Plays a plan from its first bar, at once; silences it if it is the one that is heard. */
-  toggle: (id: string, plan: BackingPlan) => void;
+  /** Plays a plan from its first bar, at once. */
+  play: (id: string, plan: BackingPlan) => void;
   stop: () => void;
   /** the beat and the chord to be seen, while something is heard */
   lights: ReactNode;
 }
 
-interface OnDesk {
-  id: string;
-  plan: BackingPlan;
-}
-
 /** Plays the plans that the page's other parts make. */
 export function BackingDesk({ children }: { children: (desk: Desk) => ReactNode }) {
-  const [on, setOn] = useState<OnDesk | null>(null);
+  const [on, setOn] = useState<{ id: string; plan: BackingPlan } | null>(null);
   const { possible, playing, start, stop, heard } = useBacking(on?.plan ?? null);
-  const plan = on?.plan ?? null;
   useEffect(() => {
-    if (plan) start({ from: plan.countInS, countIn: false });
-  }, [plan, start]);
+    if (on) start({ from: on.plan.countInS, countIn: false });
+  }, [on, start]);
   const sounds = on !== null && playing === "playing";
   return children({
     possible,
     heard: sounds ? on.id : null,
-    toggle: (id, next) => {
-      if (sounds && on.id === id) stop();
-      else if (on?.plan === next) {
-        setOn({ id, plan: next });
-        start({ from: next.countInS, countIn: false });
-      } else setOn({ id, plan: next });
-    },
+    play: (id, plan) => setOn({ id, plan }),
     stop,
-    lights: on && sounds ? <BeatLights plan={on.plan} heard={heard} playing /> : null,
+    lights: sounds ? <BeatLights plan={on.plan} heard={heard} playing /> : null,
   });
 }

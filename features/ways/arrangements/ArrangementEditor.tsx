@@ -1,4 +1,5 @@
-import { useEffect, useMemo, useState, type ReactNode } from "react";
+import type { Href } from "expo-router";
+import { useEffect, useMemo, useState } from "react";
 import { View } from "react-native";
 import { newId } from "@/features/api/newId";
 import { AskedTwice } from "@/features/ui/AskedTwice";
@@ -12,11 +13,12 @@ import { Screen } from "@/features/ui/Screen";
 import { Text } from "@/features/ui/Text";
 import { useLayout } from "@/features/ui/useLayout";
 import type { Arrangement } from "@/shared/contract/arrangement";
-import type { BackingPlan } from "@/shared/songs/backing/backingPlan";
+import { keySign } from "@/shared/music/keyWords";
+import { glyphs } from "@/shared/music/pitch";
 import { placeWords } from "@/shared/ways/arrangements/arrangementWords";
 import { weighArrangement } from "@/shared/ways/arrangements/weighArrangement";
 import type { Shape } from "@/shared/ways/way";
-import { wayPlace } from "../wayWords";
+import { shortWay } from "../wayWords";
 import {
   arrangementOf,
   arrangementPlan,
@@ -25,45 +27,41 @@ import {
   sameDraft,
   tunedStrings,
   withShape,
-  type ArrangedFor,
-  type ArrangementDraft,
 } from "./arrangementDraft";
-import { arrangementsPath, keptPath, sheetPath } from "./arrangementPaths";
+import type { ArrangementEntry } from "./arrangementEntry";
+import { arrangementsPath, draftPlace, keptPath, sheetPath } from "./arrangementPaths";
 import { useKeepArrangement, useRemoveArrangement } from "./arrangementQueries";
 import { ChordStrip } from "./ChordStrip";
 import { RightHandCard } from "./hand/RightHandCard";
+import { HearButton } from "./HearButton";
 import type { HearingDesk } from "./hearingDesk";
 import { ChordOnNeck } from "./neck/ChordOnNeck";
 import { useArrangementDraft } from "./useArrangementDraft";
 
 export interface ArrangementEditorProps {
-  on: ArrangedFor;
+  /** what it begins with, and where it is played */
+  entry: ArrangementEntry;
   /** the chords as they are played, as written, with repeats */
   sequence: readonly string[];
-  /** sounding key, with glyphs, and the instrument in words */
-  sign: string;
   instrumentWords: string;
   /** what is kept; null for a proposal */
   kept: Arrangement | null;
-  /** what it begins with */
-  begin: () => ArrangementDraft;
-  /** where the draft stands on this device */
-  place: string;
   /** the chord that is open on the neck at first, as written */
   firstOpen?: string | undefined;
   desk: HearingDesk;
   /** to another page, in place of this one where it no longer stands for anything */
-  onGo: (path: ReturnType<typeof keptPath>, replace: boolean) => void;
+  onGo: (path: Href, replace: boolean) => void;
 }
 
 /** One arrangement: its shapes chord by chord on the neck, its right hand, its sound; kept, copied and deleted. */
 export function ArrangementEditor(props: ArrangementEditorProps) {
-  const { on, sequence, sign, instrumentWords, kept, begin, place, firstOpen, desk, onGo } = props;
+  const { entry, sequence, instrumentWords, kept, firstOpen, desk, onGo } = props;
+  const { on } = entry;
   const { song, instrument, way } = on;
   const phone = useLayout() === "phone";
-  const { id, draft, change, forget } = useArrangementDraft(place, () => ({
+  const { id, draft, change, forget } = useArrangementDraft(draftPlace(entry), () => ({
     id: kept?.id ?? newId(),
-    draft: begin(),
+    draft: entry.draft,
   }));
   const [open, setOpen] = useState(() => {
     const asked = draft.chords.find(({ written }) => written === firstOpen);
@@ -78,12 +76,11 @@ export function ArrangementEditor(props: ArrangementEditorProps) {
     [draft.chords, sequence, instrument, way.capo],
   );
   const { chords, pattern } = draft;
-  const plan = useMemo(() => arrangementPlan({ chords, pattern }, on), [chords, pattern, on]);
   const { stop } = desk;
   // What is heard is what stands here: a change silences it.
   useEffect(() => stop, [chords, pattern, stop]);
   const chord = chords.find(({ written }) => written === open);
-  const changed = kept === null || !sameDraft(draft, begin());
+  const changed = kept === null || !sameDraft(draft, entry.draft);
   const list = arrangementsPath({ songId: song.id, ...on, instrumentId: instrument.id });
   const save = () => {
     if (draft.name.trim() === "") {
@@ -107,7 +104,13 @@ export function ArrangementEditor(props: ArrangementEditorProps) {
   const tuned = tunedStrings(instrument, way.retune);
   const buttons = (
     <View style={{ flexDirection: "row", gap: 8 }}>
-      <HearButton desk={desk} id={id} plan={plan} label={draft.name} grow={phone} />
+      <HearButton
+        desk={desk}
+        id={id}
+        plan={() => arrangementPlan({ chords, pattern }, on)}
+        label={draft.name}
+        grow={phone}
+      />
       <Button
         label={kept ? (changed ? "Keep the changes" : "It is kept") : "Keep it"}
         disabled={!changed}
@@ -121,7 +124,7 @@ export function ArrangementEditor(props: ArrangementEditorProps) {
   return (
     <Screen
       title={draft.name.trim() === "" ? "Arrangement" : draft.name}
-      subtitle={`Sounds in ${sign} on ${instrumentWords}. ${wayPlace(way)}`}
+      subtitle={`Sounds in ${glyphs(keySign({ tonic: on.tonic, mode: song.writtenKey?.mode ?? "major" }))} on ${instrumentWords}. ${shortWay(way)}.`}
       crumb={{ label: `${song.title} / Arrangements`, href: list }}
       wide
       footer={buttons}
@@ -201,30 +204,5 @@ export function ArrangementEditor(props: ArrangementEditorProps) {
         </Card>
       </View>
     </Screen>
-  );
-}
-
-interface HearButtonProps {
-  desk: HearingDesk;
-  id: string;
-  plan: BackingPlan | null;
-  label: string;
-  grow?: boolean;
-}
-
-/** Plays an arrangement as it is now, or silences it. */
-export function HearButton({ desk, id, plan, label, grow = false }: HearButtonProps): ReactNode {
-  const on = desk.heard === id;
-  return (
-    <Button
-      kind="secondary"
-      label={on ? "Stop" : "Hear it"}
-      accessibleName={on ? `Stop ${label}` : `Hear it: ${label}`}
-      icon={on ? "stop" : "play"}
-      disabled={!plan || !desk.possible}
-      onPress={() => plan && desk.toggle(id, plan)}
-      testID={`hear-${on ? "stop" : "it"}`}
-      style={grow ? { flexGrow: 1 } : null}
-    />
   );
 }

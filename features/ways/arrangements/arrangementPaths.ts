@@ -1,5 +1,6 @@
 import type { Href } from "expo-router";
 import type { Arrangement } from "@/shared/contract/arrangement";
+import type { ArrangedFor } from "./arrangementDraft";
 import { wayAddress, type WayAddress, type WayMoves } from "@/shared/ways/askedWay";
 
 /** What the address of an arrangement may ask for. */
@@ -37,6 +38,14 @@ export function proposalPath(of: ArrangedWay, proposal: string, chord?: string):
   };
 }
 
+/** Ways on from each way of a key: to its arrangements, and to one of its chords on the whole neck. */
+export function wayLinks(of: Omit<ArrangedWay, "way">) {
+  return {
+    arrange: (way: WayMoves) => arrangementsPath({ ...of, way }),
+    onNeck: (way: WayMoves, { written }: { written: string }) => proposalPath({ ...of, way }, "way", written),
+  };
+}
+
 /** One that is kept. */
 export function keptPath({ id, songId }: Pick<Arrangement, "id" | "songId">): Href {
   return { pathname: "/songs/[id]/arrangements/[arrangementId]", params: { id: songId, arrangementId: id } };
@@ -46,4 +55,16 @@ export function keptPath({ id, songId }: Pick<Arrangement, "id" | "songId">): Hr
 export function sheetPath({ id, songId, tonic, shift, instrument, way }: Arrangement): Href {
   const of = params({ songId, tonic, shift, instrumentId: instrument, way });
   return { pathname: "/songs/[id]/sheet", params: { ...of, arrangement: id } };
+}
+
+/** Whether an address names a kept arrangement, and not a proposal. */
+export function isKeptId(id: string): boolean {
+  return /^[0-9a-f]{8}-/i.test(id);
+}
+
+/** Where the unsaved changes of an arrangement stand on this device. */
+export function draftPlace({ id, kept, on }: { id: string; kept: boolean; on: ArrangedFor }): string {
+  if (kept) return id;
+  const { song, tonic, instrument, way } = on;
+  return [song.id, tonic, instrument.id, ...Object.values(wayAddress(way)), id].join(" ");
 }

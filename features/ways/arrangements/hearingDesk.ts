@@ -7,7 +7,7 @@ export interface HearingDesk {
   possible: boolean;
   /** which plan is heard; null for silence */
   heard: string | null;
-  toggle: (id: string, plan: BackingPlan) => void;
+  play: (id: string, plan: BackingPlan) => void;
   stop: () => void;
   /** the beat to be seen, while something is heard */
   lights: ReactNode;

@@ -20,8 +20,6 @@ const parts: LazyPart[] = [
   () => import("./songs/[id]/ways"),
   () => import("./songs/[id]/arrangements/index"),
   () => import("./songs/[id]/arrangements/[arrangementId]"),
-  () => import("@/shared/ways/arrangements/proposeArrangements"),
-  () => import("@/shared/ways/neck/allShapes"),
   () => import("@/features/ways/search/waySearch").then(({ openWaySearch }) => openWaySearch()),
   () => import("./songs/[id]/sheet"),
   () => import("./songs/[id]/stage"),

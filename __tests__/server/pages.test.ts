@@ -40,7 +40,7 @@ const get = (address: string, encoding = "identity") =>
   request(server.app).get(address).set("Accept-Encoding", encoding);
 
 it.each([...clientRoutes])("shows the client's page at %s", async (route) => {
-  const address = route.replace(":id", "6b273a3d-f63c-4f39-8493-f88da85a1e6a");
+  const address = route.replace(":id", "6b273a3d-f63c-4f39-8493-f88da85a1e6a").replace(":arrangement", "root-2");
   const response = await get(address).expect(200).expect("Content-Type", /html/);
   expect(response.text).toBe(page);
   expect(response.headers["cache-control"]).toBe("no-cache");

@@ -3,6 +3,8 @@ import { shelf } from "@/features/api/shelf";
 import type { Arrangement } from "@/shared/contract/arrangement";
 import type { Instrument } from "@/shared/instruments/instrument";
 import type { ArrangementQuestion } from "@/shared/ways/arrangements/arrangement";
+import { proposeArrangements } from "@/shared/ways/arrangements/proposeArrangements";
+import { allShapes } from "@/shared/ways/neck/allShapes";
 
 export const arrangementQueries = {
   all: () => queryOptions({ queryKey: ["arrangements"], queryFn: () => shelf.list("arrangements") }),
@@ -16,12 +18,7 @@ export const arrangementQueries = {
   proposed: (question: ArrangementQuestion | null) =>
     queryOptions({
       queryKey: ["arrangements proposed", question],
-      queryFn: question
-        ? async () => {
-            const { proposeArrangements } = await import("@/shared/ways/arrangements/proposeArrangements");
-            return proposeArrangements(question);
-          }
-        : skipToken,
+      queryFn: question ? () => proposeArrangements(question) : skipToken,
       staleTime: Infinity,
       retry: false,
     }),
@@ -29,10 +26,7 @@ export const arrangementQueries = {
   shapes: (played: string, instrument: Instrument, capo: number) =>
     queryOptions({
       queryKey: ["shapes", played, instrument, capo],
-      queryFn: async () => {
-        const { allShapes } = await import("@/shared/ways/neck/allShapes");
-        return allShapes(played, instrument, capo);
-      },
+      queryFn: () => allShapes(played, instrument, capo),
       staleTime: Infinity,
       retry: false,
     }),

@@ -41,7 +41,6 @@ export function WayGrids({ way, instrument, onKnown, known = [], onNeck }: WayGr
             {onNeck && chord.shape ? (
               <Link
                 href={onNeck(chord)}
-                aria-label={`${glyphs(chord.played)} on the whole neck`}
                 testID={`on-neck-${chord.written}`}
                 style={webStyle({ display: "block", borderRadius: 10 })}
               >

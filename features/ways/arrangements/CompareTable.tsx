@@ -56,17 +56,19 @@ export function CompareTable({ entries, desk }: CompareTableProps) {
           {row("Where", ({ weight, on }) => setSigns(placeWords(weight, tunedStrings(on.instrument, on.way.retune))))}
           {written.map((name) =>
             row(
-              glyphs(name),
+              `${glyphs(name)} in the chart`,
               ({ draft, on: { instrument, way } }) => {
                 const chord = draft.chords.find((each) => each.written === name);
                 return chord ? (
-                  <PlayedGrid
-                    chord={chord}
-                    instrument={instrument}
-                    capo={way.capo}
-                    tuned={tunedStrings(instrument, way.retune)}
-                    moved={way.retune !== 0 || way.capo !== 0}
-                  />
+                  <div style={{ width: "fit-content" }}>
+                    <PlayedGrid
+                      chord={chord}
+                      instrument={instrument}
+                      capo={way.capo}
+                      tuned={tunedStrings(instrument, way.retune)}
+                      moved={way.retune !== 0 || way.capo !== 0}
+                    />
+                  </div>
                 ) : (
                   "Not in it."
                 );

@@ -1,9 +1,9 @@
 import { anArrangement, aSong } from "@/__tests__/client/belongings";
 import { FakeApi } from "@/__tests__/client/fakeApi";
 import { kept } from "@/__tests__/client/memoryIdb";
-import { moveIn } from "./moveIn";
-import { session } from "./session";
-import { shelf } from "./shelf";
+import { moveIn } from "@/features/api/moveIn";
+import { session } from "@/features/api/session";
+import { shelf } from "@/features/api/shelf";
 
 jest.mock("idb-keyval", () => jest.requireActual<{ memoryIdb: object }>("@/__tests__/client/memoryIdb").memoryIdb);
 

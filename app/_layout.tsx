@@ -46,6 +46,10 @@ const parts: LazyPart[] = [
   () => import("./account/index"),
   () => import("./account/sign-in"),
   () => import("./account/sign-up"),
+  () => import("./account/forgotten"),
+  () => import("./account/reset"),
+  () => import("./account/confirm"),
+  () => import("./account/unsubscribe"),
   () => import("./+not-found"),
   () => import("@/shared/songs/melodyFile"),
 ];

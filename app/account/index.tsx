@@ -1,4 +1,4 @@
-import { AccountPage } from "@/features/account/AccountPage";
+import { AccountPage } from "@/features/account/home/AccountPage";
 import { Screen } from "@/features/ui/Screen";
 
 export default function AccountRoute() {

@@ -1,5 +1,5 @@
 import { useLocalSearchParams } from "expo-router";
-import { EntryPage } from "@/features/account/EntryPage";
+import { EntryPage } from "@/features/account/entry/EntryPage";
 import { Screen } from "@/features/ui/Screen";
 
 export default function SignUpRoute() {

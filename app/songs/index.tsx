@@ -1,7 +1,7 @@
 import { useQuery } from "@tanstack/react-query";
 import { useLocalSearchParams, useRouter } from "expo-router";
 import { useCallback, useMemo } from "react";
-import { EnteredNotice } from "@/features/account/EnteredNotice";
+import { EnteredNotice } from "@/features/account/entry/EnteredNotice";
 import { decidedElsewhere, decidedOn } from "@/features/keys/decision/decide";
 import { decisionFor, decisionQueries } from "@/features/keys/decision/decisionQueries";
 import { wholeVoice } from "@/features/keys/keyRows";

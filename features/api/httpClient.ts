@@ -1,5 +1,5 @@
 import type { Problem } from "@/shared/contract/problem";
-import type { SessionResponse } from "@/shared/contract/account";
+import type { ChallengeResponse, SessionResponse } from "@/shared/contract/account";
 import { ApiError } from "./apiError";
 
 const waitMs = 20_000;
@@ -73,6 +73,8 @@ async function read<T>(answer: Response): Promise<T> {
   if (!answer.ok) throw await problemOf(answer);
   if (answer.status === 204) return undefined as T;
   return (await answer.json().catch(() => {
+    // A wish that was taken up has nothing more to say.
+    if (answer.status === 202) return undefined;
     throw new ApiError(answer.status, "unexpected", "The answer could not be read. Try again.");
   })) as T;
 }
@@ -93,23 +95,44 @@ function refresh(): Promise<SessionResponse | null> {
   return refreshing;
 }
 
-async function request<T>(method: string, path: string, body?: unknown): Promise<T> {
+async function answerTo(method: string, path: string, body?: unknown): Promise<Response> {
   if (access && Date.now() > access.endsAt) await refresh();
   const used = access?.token ?? null;
   const answer = await send(method, path, body, used);
-  if (answer.status !== 401 || used === null) return read<T>(answer);
+  if (answer.status !== 401 || used === null) return answer;
   if (access?.token === used) await refresh();
   const renewed: string | null = access?.token ?? null;
-  return read<T>(renewed === null ? answer : await send(method, path, body, renewed));
+  return renewed === null ? answer : send(method, path, body, renewed);
+}
+
+async function request<T>(method: string, path: string, body?: unknown): Promise<T> {
+  return read<T>(await answerTo(method, path, body));
+}
+
+/** A file instead of JSON. */
+async function download(path: string): Promise<Blob> {
+  const answer = await answerTo("GET", path);
+  if (!answer.ok) throw await problemOf(answer);
+  return answer.blob().catch(() => {
+    throw ApiError.offline();
+  });
 }
 
 /** Opens or ends a session: no bearer token, no renewal, and never at the same time as a refresh. */
-function authenticate<T extends SessionResponse | undefined>(path: string, body?: unknown): Promise<T> {
+function authenticate<T extends SessionResponse | ChallengeResponse | undefined>(
+  path: string,
+  body?: unknown,
+): Promise<T> {
   return exclusively(async () => {
     const answer = await read<T>(await send("POST", path, body, null));
-    adopt(answer ?? null);
+    adopt(answer && "accessToken" in answer ? answer : null);
     return answer;
   });
+}
+
+/** Of whoever is not signed in, and that opens nothing. */
+async function open<T>(path: string, body?: unknown): Promise<T> {
+  return read<T>(await send("POST", path, body, null));
 }
 
 /** The one HTTP client: JSON under /api, the access token in memory only, every failure an ApiError. */
@@ -118,6 +141,9 @@ export const http = {
   put: <T>(path: string, body: unknown) => request<T>("PUT", path, body),
   post: <T>(path: string, body?: unknown) => request<T>("POST", path, body),
   delete: (path: string) => request<void>("DELETE", path),
+  /** a POST without the access token */
+  open,
+  download,
   authenticate,
   refresh,
   onSession,

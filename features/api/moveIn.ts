@@ -24,7 +24,7 @@ export interface MoveInState {
   stayed: StayedBehind[];
 }
 
-/** How the person came in. A new account receives the demonstration too; an existing one has had its own. */
+/** How the person came in. A new account receives the demonstration too; an existing one, which signing up with its password opens, has had its own. */
 type Entry = "sign-up" | "sign-in" | "resume";
 
 let state: MoveInState = { status: "idle", moved: 0, total: 0, stayed: [] };
@@ -95,7 +95,7 @@ async function putLineUp(lineUp: Items["line-ups"]): Promise<void> {
 }
 
 async function isSuperfluous(entry: Entry, belongings: Belongings): Promise<(song: Items["songs"]) => boolean> {
-  if (entry === "sign-up" || belongings.untouched.size === 0) return () => false;
+  if (belongings.untouched.size === 0) return () => false;
   if (entry === "sign-in") return (song) => belongings.untouched.has(song.id);
   const there = new Set((await serverShelf.list("songs")).map((song) => song.demo));
   return (song) => belongings.untouched.has(song.id) && there.has(song.demo);

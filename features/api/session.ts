@@ -1,4 +1,10 @@
-import type { Account, SessionResponse, SignInRequest, SignUpRequest } from "@/shared/contract/account";
+import type {
+  Account,
+  ChallengeResponse,
+  SessionResponse,
+  SignInRequest,
+  SignUpRequest,
+} from "@/shared/contract/account";
 import { ApiError } from "./apiError";
 import { http } from "./httpClient";
 import { sessionHint } from "./sessionHint";
@@ -60,6 +66,13 @@ function settled(): Promise<Session> {
   return settling;
 }
 
+/** What is asked next after a right password: nothing, or a code. */
+function entered(answer: SessionResponse | ChallengeResponse): ChallengeResponse | null {
+  if ("challenge" in answer) return answer;
+  signedIn(answer);
+  return null;
+}
+
 async function signOut(): Promise<void> {
   await http.authenticate("/auth/sign-out");
   visitor(false);
@@ -87,11 +100,25 @@ export const session = {
     return () => void listeners.delete(listener);
   },
   settled,
+  /** Resolves to the challenge where a code is needed as well, to null once signed in. */
   signUp: async (request: SignUpRequest) =>
-    signedIn(await http.authenticate<SessionResponse>("/auth/sign-up", request)),
+    entered(await http.authenticate<SessionResponse | ChallengeResponse>("/auth/sign-up", request)),
+  /** Resolves to the challenge where a code is needed as well, to null once signed in. */
   signIn: async (request: SignInRequest) =>
-    signedIn(await http.authenticate<SessionResponse>("/auth/sign-in", request)),
+    entered(await http.authenticate<SessionResponse | ChallengeResponse>("/auth/sign-in", request)),
+  /** The code that was asked for after the password: six digits, or a recovery code. */
+  secondStep: async (request: { challenge: string; code: string }) =>
+    void signedIn(await http.authenticate<SessionResponse>("/auth/second-step", request)),
   signOut,
+  /** Something about the account changed: its address was confirmed, codes were switched on. */
+  accountChanged(account: Account): void {
+    if (current.account?.id === account.id) publish({ ...current, account });
+  },
+  /** The server has ended this session on the person's own wish. */
+  leave(): void {
+    http.forget();
+    visitor(false);
+  },
   /** Whoever was signed in here goes on as a visitor. */
   stayOut: () => void visitor(false),
   followOtherTabs,

@@ -53,6 +53,7 @@ export function Field({
   const exact =
     secure === true ||
     autoComplete === "email" ||
+    autoComplete === "one-time-code" ||
     autoComplete === "new-password" ||
     autoComplete === "current-password";
   return (

@@ -36,6 +36,10 @@ export const clientRoutes = [
   "/account",
   "/account/sign-in",
   "/account/sign-up",
+  "/account/forgotten",
+  "/account/reset",
+  "/account/confirm",
+  "/account/unsubscribe",
 ] as const;
 
 const id = "[0-9a-fA-F]{8}(?:-[0-9a-fA-F]{4}){3}-[0-9a-fA-F]{12}";

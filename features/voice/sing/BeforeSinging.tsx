@@ -1,12 +1,11 @@
-import { Pressable, View } from "react-native";
+import { View } from "react-native";
 import { Button } from "@/features/ui/Button";
 import { LiveText } from "@/features/ui/LiveText";
 import { Notice } from "@/features/ui/Notice";
 import { Screen } from "@/features/ui/Screen";
+import { Switch } from "@/features/ui/Switch";
 import { Text } from "@/features/ui/Text";
-import { colors } from "@/features/ui/theme";
 import { useLayout } from "@/features/ui/useLayout";
-import { webProps } from "@/features/ui/webStyle";
 import { useCountInSetting } from "../listening/countInSetting";
 import { OtherWays } from "./OtherWays";
 
@@ -55,7 +54,13 @@ export function BeforeSinging({ asking, onSing }: BeforeSingingProps) {
             Sing any song you know for 5 to 20 seconds, without an instrument, and see which notes are yours.
           </Text>
           <Text tone="soft">The sound stays on this device. Only numbers are kept, and only if you say so.</Text>
-          <CountInSwitch on={counted} onChange={setCounted} />
+          <Switch
+            label="Count me in"
+            hint="Four clicks, also to be seen, before the listening begins."
+            on={counted}
+            onChange={setCounted}
+            testID="count-in"
+          />
           {wide ? asked : null}
         </View>
         <View style={[{ gap: 28 }, wide ? column : null]}>
@@ -68,50 +73,6 @@ export function BeforeSinging({ asking, onSing }: BeforeSingingProps) {
 }
 
 const column = { flexGrow: 1, flexBasis: 0, maxWidth: 560 } as const;
-
-function CountInSwitch({ on, onChange }: { on: boolean; onChange: (on: boolean) => void }) {
-  return (
-    <Pressable
-      role="switch"
-      aria-checked={on}
-      onPress={() => onChange(!on)}
-      testID="count-in"
-      {...webProps({
-        // The web renderer lets Space press buttons only.
-        onKeyDown: (event: React.KeyboardEvent) => {
-          if (event.key !== " ") return;
-          event.preventDefault();
-          onChange(!on);
-        },
-      })}
-      style={{ flexDirection: "row", alignItems: "center", gap: 12, minHeight: 48 }}
-    >
-      <View
-        style={{
-          width: 46,
-          height: 26,
-          borderRadius: 13,
-          borderWidth: 1.5,
-          borderColor: on ? colors.plum : colors.inkSoft,
-          backgroundColor: on ? colors.plum : "transparent",
-          justifyContent: "center",
-          alignItems: on ? "flex-end" : "flex-start",
-          paddingHorizontal: 3,
-        }}
-      >
-        <View
-          style={{ width: 17, height: 17, borderRadius: 9, backgroundColor: on ? colors.onPlum : colors.inkSoft }}
-        />
-      </View>
-      <View style={{ flexShrink: 1 }}>
-        <Text variant="label">Count me in</Text>
-        <Text variant="small" tone="soft">
-          Four clicks, also to be seen, before the listening begins.
-        </Text>
-      </View>
-    </Pressable>
-  );
-}
 
 /** How to sing without harm, and whose advice the four weeks are. */
 function Cautions() {

@@ -1,6 +1,6 @@
 import { MovesIn } from "./MovesIn";
 import { CredentialsForm } from "./CredentialsForm";
-import { checkNewPassword } from "./checkPassword";
+import { checkNewPassword } from "../forms/checkPassword";
 import type { useEntry } from "./useEntry";
 
 /** Opens an account. */

@@ -108,14 +108,64 @@ it("shows the server's sentence for each field in place", async () => {
   expect(value("Password")).toBe(password);
 });
 
-it("puts a taken address at the address, and lets the person mend it", async () => {
+it("signs up the same whether or not the address is known", async () => {
   api.addPerson(email, "another long one");
   open("sign-up");
   fillAndSend("Sign up");
-  expect(await screen.findByText(/an account with this e-mail address already/)).toBeTruthy();
-  type("E-mail address", "m.oake@orlow.example");
+  expect((await screen.findByTestId("redirect")).textContent).toBe("/songs?entered=yes");
+});
+
+const challenge = { status: 202, body: { challenge: "c-1", expiresInS: 300 } };
+const refusal = (status: number, code: string, message: string, path?: string) => ({
+  status,
+  body: { code, message, ...(path === undefined ? {} : { fields: [{ path, message }] }) },
+});
+
+it("asks for the code after the password, keeps a wrong one, and goes in with the right one", async () => {
+  const id = api.addPerson(email, password);
+  await shelf.put("voices", aVoice());
+  let answer: ReturnType<typeof api.intercept> = refusal(401, "wrong-code", "This code is not right.", "code");
+  api.intercept = (_method, path) =>
+    path === "/auth/sign-in" ? challenge : path === "/auth/second-step" ? answer : undefined;
+  open("sign-in", "/songs/7");
+  fillAndSend("Sign in");
+  await waitFor(() => expect(document.activeElement).toBe(screen.getByLabelText("Code")));
+  expect(screen.getByLabelText("Code").getAttribute("autocomplete")).toBe("one-time-code");
+  type("Code", "123");
   fireEvent.submit(screen.getByRole("form"));
-  expect(await screen.findByTestId("redirect")).toBeTruthy();
+  expect(await screen.findByText("Type the six digits, or a recovery code.")).toBeTruthy();
+  expect(api.count("POST /auth/second-step")).toBe(0);
+  type("Code", "123456");
+  fireEvent.submit(screen.getByRole("form"));
+  expect(await screen.findByText("This code is not right.")).toBeTruthy();
+  expect(value("Code")).toBe("123456");
+  answer = api.sessionOf(id);
+  fireEvent.submit(screen.getByRole("form"));
+  expect((await screen.findByTestId("redirect")).textContent).toBe("/songs/7");
+  expect(api.tables.voices.size).toBe(1);
+});
+
+it("goes back to the password with the address still there when the code took too long", async () => {
+  api.intercept = (_method, path) =>
+    path === "/auth/sign-in"
+      ? challenge
+      : path === "/auth/second-step"
+        ? refusal(401, "challenge-expired", "That took too long. Type your password again.")
+        : undefined;
+  open("sign-in");
+  fillAndSend("Sign in");
+  fireEvent.change(await screen.findByLabelText("Code"), { target: { value: "123456" } });
+  fireEvent.submit(screen.getByRole("form"));
+  expect((await screen.findByTestId("password-again")).textContent).toMatch(/took too long/);
+  expect([value("E-mail address"), value("Password")]).toEqual([email, ""]);
+});
+
+it("says that an account is suspended", async () => {
+  api.intercept = () => refusal(403, "suspended", "This account is suspended. Write to whoever runs this server.");
+  open("sign-in");
+  fillAndSend("Sign in");
+  expect((await screen.findByRole("alert")).textContent).toMatch(/suspended/);
+  expect(value("E-mail address")).toBe(email);
 });
 
 it("says that address and password do not belong together, and keeps both", async () => {

@@ -1,6 +1,8 @@
-import { MovesIn } from "./MovesIn";
+import { View } from "react-native";
+import { TextLink } from "@/features/ui/TextLink";
+import { checkKnownPassword } from "../forms/checkPassword";
 import { CredentialsForm } from "./CredentialsForm";
-import { checkKnownPassword } from "./checkPassword";
+import { MovesIn } from "./MovesIn";
 import type { useEntry } from "./useEntry";
 
 /** Opens a session of an existing account. */
@@ -14,6 +16,11 @@ export function SignInForm({ entry }: { entry: ReturnType<typeof useEntry> }) {
       checkPassword={checkKnownPassword}
       {...entry}
     >
+      <View style={{ alignSelf: "flex-start" }}>
+        <TextLink href="/account/forgotten" testID="to-forgotten">
+          Forgotten password
+        </TextLink>
+      </View>
       <MovesIn />
     </CredentialsForm>
   );

@@ -10,3 +10,13 @@ export function checkNewPassword(password: string): string | null {
 export function checkKnownPassword(password: string): string | null {
   return password === "" ? "Type your password." : null;
 }
+
+/** What is wrong with an address, as far as can be said here; the server looks closer. */
+export function checkAddress(email: string): string | null {
+  return email.trim() === "" ? "Type your e-mail address." : null;
+}
+
+/** What is wrong with a code of the app or a recovery code; null if nothing. */
+export function checkCode(code: string): string | null {
+  return code.trim().length < 6 ? "Type the six digits, or a recovery code." : null;
+}

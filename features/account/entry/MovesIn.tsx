@@ -1,8 +1,8 @@
 import { useQuery } from "@tanstack/react-query";
 import { View } from "react-native";
 import { Text } from "@/features/ui/Text";
-import { belongingsInWords } from "./belongingsInWords";
-import { belongingsQueries } from "./belongingsQueries";
+import { belongingsInWords } from "../belongingsInWords";
+import { belongingsQueries } from "../belongingsQueries";
 
 /** Says what will move from this device into the account; nothing where there is nothing. */
 export function MovesIn() {

@@ -5,8 +5,8 @@ import { Heading } from "@/features/ui/Heading";
 import { LinkButton } from "@/features/ui/LinkButton";
 import { Notice } from "@/features/ui/Notice";
 import { Text } from "@/features/ui/Text";
-import { belongingsInWords } from "./belongingsInWords";
-import { belongingsQueries } from "./belongingsQueries";
+import { belongingsInWords } from "../belongingsInWords";
+import { belongingsQueries } from "../belongingsQueries";
 
 /** What a visitor has on this device, and the way to keep it. */
 export function VisitorCard({ ended }: { ended: boolean }) {

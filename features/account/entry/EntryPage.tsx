@@ -7,6 +7,7 @@ import { Notice } from "@/features/ui/Notice";
 import { Text } from "@/features/ui/Text";
 import { useLayout } from "@/features/ui/useLayout";
 import { nextPath } from "./nextPath";
+import { SecondStepForm } from "./SecondStepForm";
 import { SignInForm } from "./SignInForm";
 import { SignUpForm } from "./SignUpForm";
 import { useEntry, type EntryKind } from "./useEntry";
@@ -31,11 +32,22 @@ export function EntryPage({ kind, next }: EntryPageProps) {
     return <Redirect href={(settled ? inside : "/account") as Href} />;
   }
   const up = kind === "sign-up";
+  if (entry.asksCode) {
+    const step = <SecondStepForm entry={entry} />;
+    return (
+      <View style={{ maxWidth: 480, width: "100%" }}>{phone ? step : <Card style={{ padding: 24 }}>{step}</Card>}</View>
+    );
+  }
   const form = up ? <SignUpForm entry={entry} /> : <SignInForm entry={entry} />;
   return (
     <View style={{ maxWidth: 480, width: "100%", gap: 20 }}>
       {session.ended && (
         <Notice kind="caution">Your session has ended. Sign in again to see your shelf; nothing is lost.</Notice>
+      )}
+      {entry.again !== null && (
+        <Notice kind="caution" testID="password-again">
+          {entry.again}
+        </Notice>
       )}
       <Text variant="body">
         {up
@@ -43,6 +55,12 @@ export function EntryPage({ kind, next }: EntryPageProps) {
           : "Sign in to find your voices, songs and keys."}
       </Text>
       {phone ? form : <Card style={{ padding: 24 }}>{form}</Card>}
+      {up && (
+        <Text variant="small" tone="soft">
+          We send a link to this address to see that it is yours. If you have an account already and forgot its
+          password, choose a new one by “Forgotten password” on the page to sign in.
+        </Text>
+      )}
       <View style={{ flexDirection: "row", flexWrap: "wrap", alignItems: "center", columnGap: 4 }}>
         <Text variant="body">{up ? "You have an account already?" : "You have no account yet?"}</Text>
         <LinkButton

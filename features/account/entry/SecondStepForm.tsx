@@ -23,7 +23,7 @@ export function SecondStepForm({ entry }: { entry: ReturnType<typeof useEntry> }
       <Text variant="body">
         The password is right. Now type the six digits that your authenticator app shows, or one of your recovery codes.
       </Text>
-      <Form label="Code" onSubmit={() => entry.entering || submit()}>
+      <Form label="Second step" onSubmit={() => entry.entering || submit()}>
         <div ref={field}>
           <FormField
             form={form}

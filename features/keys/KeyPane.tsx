@@ -6,6 +6,7 @@ import { webStyle } from "@/features/ui/webStyle";
 import type { Song } from "@/shared/contract/song";
 import { DecisionCard } from "./decision/DecisionCard";
 import { KeyColumn } from "./KeyColumn";
+import { FixedLine } from "./FixedLine";
 import type { KeyRow } from "./keyRows";
 import { KeysMissing } from "./KeysMissing";
 import { partWords } from "./partWords";
@@ -47,6 +48,7 @@ export function KeyPane({ song, keys, singer, selected, onSelect }: KeyPaneProps
         <>
           <ReachLine voice={voice} voiceId={singer?.id ?? null} />
           <TriedLine songId={song.id} tried={keys.tried} />
+          <FixedLine songId={song.id} fixed={keys.fixed} />
           {noFit !== null && (
             <Text variant="small" testID="no-key-fits" style={{ marginBottom: 8 }}>
               {noFit}

@@ -17,6 +17,7 @@ import { KeyList } from "./deck/KeyList";
 import { MoveByHand } from "./deck/MoveByHand";
 import type { KeyRow } from "./keyRows";
 import { KeysMissing } from "./KeysMissing";
+import { FixedLine } from "./FixedLine";
 import { roomWords } from "./partWords";
 import { ReachLine } from "./ReachLine";
 import { songWords } from "./songWords";
@@ -104,6 +105,7 @@ export function KeysScreen({ song, keys, pending, voice, waysOf, instrument }: K
         <>
           <ReachLine voice={keys.voice} voiceId={voice?.id ?? null} />
           <TriedLine songId={song.id} tried={keys.tried} />
+          <FixedLine songId={song.id} fixed={keys.fixed} />
           {keys.noFit !== null && (
             <View style={{ marginBottom: 10 }}>
               <Notice kind="caution" testID="no-key-fits">
@@ -160,7 +162,9 @@ export function KeysScreen({ song, keys, pending, voice, waysOf, instrument }: K
           {!wide && <PinBar songId={song.id} pinning={pinning} />}
         </>
       )}
-      {song.tune && <TogetherLink songId={song.id} />}
+      {song.tune && (
+        <TogetherLink songId={song.id} chords={keys.written !== null} selected={selected} instrument={instrument.id} />
+      )}
     </Screen>
   );
 }

@@ -1,3 +1,4 @@
+import { fitSentence, type FixedInstrument } from "@/shared/keys/fixed/fixedInstrument";
 import { COARSE_WORDS } from "@/shared/keys/keyReason";
 import type { SingingVoice, KeyMark, KeyParts, KeyScore } from "@/shared/keys/keyScore";
 import { noKeyFits } from "@/shared/keys/noKeyFits";
@@ -39,18 +40,21 @@ export interface KeyRow {
   spoken: string;
 }
 
-/** Scores as rows, best first. `chordsIn` gives the song's chords in a key. */
+/** Scores as rows, in their order. `chordsIn` gives the song's chords in a key; `fixed` instruments say whether it suits them. */
 export function keyRows(
   scores: readonly KeyScore[],
   written: KeyName,
   chordsIn: (key: KeyName) => readonly string[],
+  fixed: readonly FixedInstrument[] = [],
 ): KeyRow[] {
   return scores.map((score) => {
     const key = movedKey(written, score.shift);
     const sign = glyphs(keySign(key));
     const span = spanWords(score, key);
     const points = Math.round(score.score);
-    const reason = score.reason.replace(` ${COARSE_WORDS}`, "");
+    const judged = score.reason.replace(` ${COARSE_WORDS}`, "");
+    const fit = fitSentence(key, fixed);
+    const reason = fit === null ? judged : `${fit} ${judged}`;
     return {
       key,
       sign,

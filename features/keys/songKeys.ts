@@ -1,6 +1,8 @@
 import type { Decision } from "@/shared/contract/decision";
 import type { Song } from "@/shared/contract/song";
 import type { SingingVoice } from "@/shared/keys/keyScore";
+import type { FixedInstrument } from "@/shared/keys/fixed/fixedInstrument";
+import { fittingFirst } from "@/shared/keys/fixed/fittingFirst";
 import { scoreKeys } from "@/shared/keys/scoreKeys";
 import { parseChord, transposeChord } from "@/shared/music/chord";
 import { type KeyName, tonicPitchClass } from "@/shared/music/keyName";
@@ -38,13 +40,20 @@ export function chordsIn(chords: readonly string[], from: KeyName, to: KeyName):
   });
 }
 
-/** All twelve keys of a song for a voice, best first; null while the tune or the voice is not known. */
-export function keyRowsOf(song: Song, singing: SingingVoice | null): KeyRow[] | null {
+/**
+ * All twelve keys of a song for a voice, best first; null while the tune or the voice is not known. Keys that the fixed
+ * instruments of the line-up play come first.
+ */
+export function keyRowsOf(
+  song: Song,
+  singing: SingingVoice | null,
+  fixed: readonly FixedInstrument[] = [],
+): KeyRow[] | null {
   const written = writtenKeyOf(song);
   if (!song.tune || !singing || !written) return null;
   const chords = songChords(song).slice(0, chordsShown);
   const scores = scoreKeys(song.tune, singing, { mode: written.mode, presentKey: written.tonic });
-  return keyRows(scores, written, (key) => chordsIn(chords, written, key));
+  return keyRows(fittingFirst(scores, written.mode, fixed), written, (key) => chordsIn(chords, written, key), fixed);
 }
 
 /** The key that a page speaks of, and how it came to that. */

@@ -1,6 +1,6 @@
 import { QueryClientProvider } from "@tanstack/react-query";
 import { act, renderHook, waitFor } from "@testing-library/react";
-import { aDecision, aSong, aVoice } from "@/__tests__/client/belongings";
+import { aDecision, aLineUp, aSong, aVoice } from "@/__tests__/client/belongings";
 import { kept, refuseStorage } from "@/__tests__/client/memoryIdb";
 import { queryClient } from "@/features/api/queryClient";
 import { shelf } from "@/features/api/shelf";
@@ -124,4 +124,23 @@ test("where no key holds the tune that is said, and none is called the best", ()
   expect(keys.current.noFit).toMatch(/^No key holds the whole tune; /);
   expect(keys.current.inHand?.because).toBe("nearest");
   expect(open(evenings).current.noFit).toBeNull();
+});
+
+test("a whistle in the line-up brings the keys that it plays to the front, and each row says whether it fits", async () => {
+  const keys = open(evenings);
+  await waitFor(() => expect(keys.current.rows).not.toBeNull());
+  const before = keys.current.rows!;
+  expect(before.some(({ reason }) => reason.includes("whistle"))).toBe(false);
+  await shelf.put("line-ups", aLineUp(song.id));
+  await act(() => queryClient.invalidateQueries({ queryKey: ["line-ups"] }));
+  await waitFor(() => expect(keys.current.fixed).toHaveLength(1));
+  const rows = keys.current.rows!;
+  const inside = rows.filter(({ beyond }) => !beyond);
+  const fitting = inside.filter(({ key }) => ["D", "G"].includes(key.tonic)).length;
+  expect(fitting).toBeGreaterThan(0);
+  inside.forEach(({ key, reason }, place) => {
+    expect([key.tonic, ["D", "G"].includes(key.tonic)]).toEqual([key.tonic, place < fitting]);
+    expect(reason).toMatch(place < fitting ? /^Fits the whistle in D\. / : /^Does not fit the whistle in D\. /);
+  });
+  expect(keys.current.inHand?.row).toBe(rows[0]);
 });

@@ -1,10 +1,12 @@
 import { useQuery } from "@tanstack/react-query";
 import { useMemo } from "react";
+import { useFixedInstruments } from "@/features/api/lineUps";
 import { newId } from "@/features/api/newId";
 import type { Decision, EarlierChoice } from "@/shared/contract/decision";
 import type { Song } from "@/shared/contract/song";
 import type { SingingVoice } from "@/shared/keys/keyScore";
 import { presets } from "@/shared/instruments/presets";
+import type { FixedInstrument } from "@/shared/keys/fixed/fixedInstrument";
 import { COARSE_WORDS } from "@/shared/keys/keyReason";
 import type { KeyName } from "@/shared/music/keyName";
 import { keySign } from "@/shared/music/keyWords";
@@ -30,6 +32,8 @@ export interface SongKeys {
   decided: { sign: string; otherVoice: string | null } | null;
   /** why the comfort band stands elsewhere than the voice alone would have it: what was tried */
   tried: readonly string[];
+  /** instruments of the line-up that are made in one key, and so move the ranking */
+  fixed: readonly FixedInstrument[];
   /** said where no key holds the whole tune */
   noFit: string | null;
   inHand: KeyInHand | null;
@@ -76,7 +80,8 @@ export function useSongKeys(
     [song, forKeys, tries.data, singer?.id],
   );
   const singing = tried?.voice ?? null;
-  const rows = useMemo(() => keyRowsOf(song, singing), [song, singing]);
+  const fixed = useFixedInstruments(song.id);
+  const rows = useMemo(() => keyRowsOf(song, singing, fixed), [song, singing, fixed]);
   const voice = useMemo(() => singing && wholeVoice(singing), [singing]);
   const past = useGoneDecisions();
   const singerId = singer?.id ?? null;
@@ -107,6 +112,7 @@ export function useSongKeys(
         : null,
     },
     tried: tried?.why ?? [],
+    fixed,
     noFit: rows && noFitWords(rows),
     inHand,
     written,

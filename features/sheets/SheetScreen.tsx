@@ -11,6 +11,7 @@ import type { Crumb } from "@/features/ui/ScreenHead";
 import { Segmented } from "@/features/ui/Segmented";
 import { Skeleton } from "@/features/ui/Skeleton";
 import { Text } from "@/features/ui/Text";
+import { TextLink } from "@/features/ui/TextLink";
 import { colors } from "@/features/ui/theme";
 import { useLayout } from "@/features/ui/useLayout";
 import { webStyle } from "@/features/ui/webStyle";
@@ -33,12 +34,24 @@ export interface SheetScreenProps {
   searching: boolean;
   stage: Href;
   choices: Omit<SheetChoicesProps, "options" | "onChange">;
+  /** where the walk stands that explains how it is played */
+  why?: Href | undefined;
   /** how the sheet is shared, or until when it is */
   share: ReactNode;
 }
 
 /** A song's sheet: the pages as they will be printed, what stands on them, and the ways to paper, stage and others. */
-export function SheetScreen({ sheet, title, subtitle, crumb, searching, stage, choices, share }: SheetScreenProps) {
+export function SheetScreen({
+  sheet,
+  title,
+  subtitle,
+  crumb,
+  searching,
+  stage,
+  choices,
+  why,
+  share,
+}: SheetScreenProps) {
   const layout = useLayout();
   const [options, change] = useSheetHabits();
   const [onPaper, setOnPaper] = useState(false);
@@ -90,6 +103,11 @@ export function SheetScreen({ sheet, title, subtitle, crumb, searching, stage, c
       <Text variant="small" tone="soft" testID="page-count">
         {pages.length === 1 ? `One page on ${options.paper}.` : `${pages.length} pages on ${options.paper}.`}
       </Text>
+      {why !== undefined && (
+        <TextLink href={why} testID="sheet-to-why">
+          Why this works, step by step
+        </TextLink>
+      )}
       <Card style={{ gap: 12 }}>
         <Heading level={2} size={16}>
           Share it

@@ -36,10 +36,12 @@ export interface WayCardProps {
   /** where the player may tell which shapes they know */
   ticks?: ShapeTicks | undefined;
   links?: WayLinks | undefined;
+  /** where the walk stands that explains this way */
+  why?: Href | undefined;
 }
 
 /** One way: what to do, what it costs, the shapes, and what to take care of. */
-export function WayCard({ way, instrument, chosen, radio, onChoose, full = false, ticks, links }: WayCardProps) {
+export function WayCard({ way, instrument, chosen, radio, onChoose, full = false, ticks, links, why }: WayCardProps) {
   const id = useId();
   return (
     <>
@@ -74,6 +76,13 @@ export function WayCard({ way, instrument, chosen, radio, onChoose, full = false
       )}
       {chosen && (way.retune !== 0 || way.capo > 0) && (
         <TextLink href={tunePath(instrument.id, way.retune, way.capo)}>Tune for this, string by string</TextLink>
+      )}
+      {chosen && why !== undefined && (
+        <View style={{ marginTop: 4 }}>
+          <TextLink href={why} testID="way-to-why">
+            Why this works, step by step
+          </TextLink>
+        </View>
       )}
       {way.cautions.length > 0 && <Cautions texts={way.cautions} />}
       {way.retune !== 0 && (

@@ -5,6 +5,7 @@ import { Heading } from "@/features/ui/Heading";
 import { Notice } from "@/features/ui/Notice";
 import { Text } from "@/features/ui/Text";
 import { webStyle } from "@/features/ui/webStyle";
+import { whyPath } from "@/features/ui/whyPath";
 import type { KeyName } from "@/shared/music/keyName";
 import { keySign } from "@/shared/music/keyWords";
 import { glyphs } from "@/shared/music/pitch";
@@ -47,7 +48,7 @@ export function WayColumn({ songId, into, shift, instrument, error, children }: 
       )}
       {children}
       {into && (
-        <View style={{ marginTop: 12 }}>
+        <View style={{ marginTop: 12, gap: 4, alignItems: "flex-start" }}>
           <Link
             href={{
               pathname: "/songs/[id]/ways",
@@ -56,6 +57,15 @@ export function WayColumn({ songId, into, shift, instrument, error, children }: 
             style={webStyle(link)}
           >
             All ways, wishes and instruments
+          </Link>
+          <Link href={whyPath(songId, into, shift)} style={webStyle(link)} testID="column-to-why">
+            Why this works, step by step
+          </Link>
+          <Link
+            href={{ pathname: "/songs/[id]/everyone", params: { id: songId, key: into.tonic, shift: String(shift) } }}
+            style={webStyle(link)}
+          >
+            Everyone’s plan
           </Link>
         </View>
       )}

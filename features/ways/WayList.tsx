@@ -1,3 +1,4 @@
+import type { Href } from "expo-router";
 import { View } from "react-native";
 import { Card } from "@/features/ui/Card";
 import { useRadioKeys } from "@/features/ui/useRadioKeys";
@@ -16,10 +17,21 @@ export interface WayListProps {
   full?: boolean;
   ticks?: ShapeTicks | undefined;
   links?: WayLinks | undefined;
+  why?: ((way: Way) => Href) | undefined;
 }
 
 /** The ways as a radio group. A press anywhere on a card chooses it; the keyboard has one stop in its head. */
-export function WayList({ ways, instrument, chosen, onChoose, columns = 1, full = false, ticks, links }: WayListProps) {
+export function WayList({
+  ways,
+  instrument,
+  chosen,
+  onChoose,
+  columns = 1,
+  full = false,
+  ticks,
+  links,
+  why,
+}: WayListProps) {
   const values = ways.map((_, index) => String(index));
   const keys = useRadioKeys(values, String(chosen), (value) => onChoose(Number(value)));
   return (
@@ -48,6 +60,7 @@ export function WayList({ ways, instrument, chosen, onChoose, columns = 1, full 
               full={full}
               ticks={ticks}
               links={links}
+              why={why?.(way)}
             />
           </Card>
         </View>

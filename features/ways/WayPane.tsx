@@ -45,6 +45,8 @@ export interface WayPaneProps {
   sheet?: (way: Way) => Href;
   /** to arrangements and to chords on the whole neck */
   links?: WayLinks | undefined;
+  /** where the walk stands that explains a way */
+  why?: (way: Way) => Href;
   /** where the ways stand, and where the button that takes one */
   children: (parts: { list: ReactNode; use: ReactNode }) => ReactNode;
 }
@@ -65,6 +67,7 @@ export function WayPane({
   ticks,
   sheet,
   links,
+  why,
   children,
 }: WayPaneProps) {
   const [chosen, setChosen] = useState<string | null>(null);
@@ -138,6 +141,7 @@ export function WayPane({
         full={full}
         ticks={ticks}
         links={links}
+        why={why}
       />
     ),
     use: (

@@ -18,7 +18,8 @@ export interface MovableShape {
 const highest = 13;
 
 /**
- * The shapes of a chord that can be moved along the neck, the easiest for each string that carries the root.
+ * The shapes of a chord that can be moved along the neck, the fullest for each string that carries the root: those
+ * with the root lowest first, then those that sound most strings, then the easier ones.
  *
  * @param chord a parsed chord
  * @param instrument in its tuning
@@ -32,7 +33,9 @@ export function movableShapes(chord: Chord, instrument: Instrument, most: number
   const closed = playableShapes(chord, instrument, { maxFret: Math.min(highest, instrument.frets) }, ({ frets }) =>
     frets.every((fret) => fret !== 0),
   ).map((playable) => drawnShape(playable, chord, instrument, 0));
-  const byEase = closed.filter(({ roots }) => roots.length > 0).sort((a, b) => b.ease - a.ease || sum(a) - sum(b));
+  const fullest = closed
+    .filter(({ roots }) => roots.length > 0)
+    .sort((a, b) => Number(rootLowest(b)) - Number(rootLowest(a)) || sounding(b) - sounding(a) || b.ease - a.ease);
   const found: MovableShape[] = [];
   const marks = new Set<string>();
   const take = (shape: Shape, newRoot: boolean) => {
@@ -43,8 +46,8 @@ export function movableShapes(chord: Chord, instrument: Instrument, most: number
     marks.add(mark);
     found.push({ shape, rootString, rootFret: shape.frets[rootString]! });
   };
-  for (const shape of byEase) take(shape, true);
-  for (const shape of byEase) take(shape, false);
+  for (const shape of fullest) take(shape, true);
+  for (const shape of fullest) take(shape, false);
   return found.sort((a, b) => lowestFret(a.shape) - lowestFret(b.shape) || a.rootString - b.rootString);
 }
 
@@ -72,6 +75,10 @@ function lowestFret({ frets }: Shape): number {
   return Math.min(...frets.map((fret) => fret ?? 99));
 }
 
-function sum({ frets }: Shape): number {
-  return frets.reduce<number>((total, fret) => total + (fret ?? 0), 0);
+function sounding({ frets }: Shape): number {
+  return frets.filter((fret) => fret !== null).length;
+}
+
+function rootLowest({ frets, roots }: Shape): boolean {
+  return frets.findIndex((fret) => fret !== null) === roots[0];
 }

@@ -12,6 +12,7 @@ import { SheetScreen } from "@/features/sheets/SheetScreen";
 import { useSheetInHand } from "@/features/sheets/useSheetInHand";
 import { SongState } from "@/features/songs/SongState";
 import { songQueries } from "@/features/songs/songQueries";
+import { whyPath } from "@/features/ui/whyPath";
 import { useSingingVoice } from "@/features/voice/useSingingVoice";
 import { useSheetArrangements } from "@/features/ways/arrangements/useSheetArrangements";
 import { wayQueries } from "@/features/ways/wayQueries";
@@ -57,6 +58,7 @@ function SongSheet({ song }: { song: Song }) {
         ...inHand.choices,
         chooser: <InstrumentSelect owned={owned} value={instrument.id} onChange={choose} />,
       }}
+      why={keys.written ? whyPath(song.id, key, shift, { instrument: instrument.id, way: inHand.way }) : undefined}
       share={<ShareLinks songId={song.id} view={linkView(key, shift, instrument, inHand.way)} />}
     />
   );

@@ -10,6 +10,7 @@ import { decidedHere, useSongKeys } from "@/features/keys/useSongKeys";
 import { MovedChart } from "@/features/songs/MovedChart";
 import { SongState } from "@/features/songs/SongState";
 import { songQueries } from "@/features/songs/songQueries";
+import { whyPath } from "@/features/ui/whyPath";
 import { useSingingVoice } from "@/features/voice/useSingingVoice";
 import { wayLinks } from "@/features/ways/arrangements/arrangementPaths";
 import { WayPane } from "@/features/ways/WayPane";
@@ -54,6 +55,7 @@ function Ways({ song }: { song: Song }) {
       ticks={ticking ? ticksOn(instrument, wishes, keepWishes) : undefined}
       onUse={(way) => keys.take({ tonic: key.tonic, shift, instrument: instrument.id, way }, settle)}
       links={wayLinks({ songId: song.id, tonic: key.tonic, shift, instrumentId: instrument.id })}
+      why={(way) => whyPath(song.id, key, shift, { instrument: instrument.id, way })}
       sheet={(way) => ({
         pathname: "/songs/[id]/sheet",
         params: { id: song.id, key: key.tonic, shift, instrument: instrument.id, ...wayAddress(way) },

@@ -10,7 +10,7 @@ export function PrintSheet({ zoom }: PrintSheetProps) {
       {`@page{size:A4 landscape;margin:9mm}
 html,body,#root{background:#fff!important}
 body{zoom:${zoom}}
-[role=banner]>div+div,[role=main] [role=button],:has(>[data-testid=to-together]),[data-screen],[data-testid=decided],input[type=radio]{display:none!important}
+[role=banner]>div+div,[role=main] [role=button],[data-testid=keys-further],[data-screen],[data-testid=decided],input[type=radio]{display:none!important}
 [role=main]{max-width:none!important}
 [data-testid=compare]{overflow:visible!important}
 th,td{position:relative!important;left:auto!important;top:auto!important}

@@ -10,7 +10,7 @@ import { spellTonic, tonicPitchClass, type KeyName } from "@/shared/music/keyNam
 import { glyphs, pitchClass } from "@/shared/music/pitch";
 import { proposeHome, sungMelody } from "@/shared/songs/sungMelody";
 import { tonics } from "../editor/keyChoice";
-import { SmallKeyboard } from "../melody/entry/SmallKeyboard";
+import { SmallKeyboard } from "@/features/ui/notes/SmallKeyboard";
 import { useTapTone } from "../melody/entry/useTapTone";
 import type { Listening, ListeningEvent } from "./listening";
 

@@ -50,7 +50,7 @@ export function newKeyStep(
     kind: "new-key",
     title,
     words: [
-      `${now} lies ${distanceWords(near)} ${near < 0 ? "under" : "over"} ${old}. Numbers stay, names change: ${listed(
+      `${now} lies ${distanceWords(near)} ${near < 0 ? "under" : "over"} ${old}, or ${distanceWords(12 - Math.abs(near))} ${near < 0 ? "over" : "under"} it. Numbers stay, names change: ${listed(
         chords.slice(0, named).map(({ roman, sounding }) => `${numberGlyphs(roman)} is now ${glyphs(sounding)}`),
       )}.`,
       "Every chord moves by the same distance, so the song is the same song, only lower or higher.",

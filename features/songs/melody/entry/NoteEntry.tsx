@@ -4,8 +4,8 @@ import { Select } from "@/features/ui/Select";
 import { Text } from "@/features/ui/Text";
 import type { Instrument } from "@/shared/instruments/instrument";
 import { noteLengths, type NoteLength } from "../lengthWords";
-import { Fretboard } from "./Fretboard";
-import { SmallKeyboard } from "./SmallKeyboard";
+import { Fretboard } from "@/features/ui/notes/Fretboard";
+import { SmallKeyboard } from "@/features/ui/notes/SmallKeyboard";
 
 export interface NoteEntryProps {
   on: "keys" | "neck";
@@ -32,7 +32,7 @@ export function NoteEntry({ on, instrument, chooser, from, onNote }: NoteEntryPr
       {on === "keys" ? (
         <SmallKeyboard label="Keys for the tune" from={from} onNote={enter} testID="keyboard" />
       ) : (
-        <Fretboard instrument={instrument} onNote={enter} testID="fretboard" />
+        <Fretboard instrument={instrument} onPlace={({ midi }) => enter(midi)} testID="fretboard" />
       )}
       <Text variant="small" tone="soft">
         {on === "keys"

@@ -1,9 +1,9 @@
 import { useState } from "react";
 import { Pressable, View } from "react-native";
-import { IconButton } from "@/features/ui/IconButton";
-import { Text } from "@/features/ui/Text";
-import { colors, sizes } from "@/features/ui/theme";
-import { webProps, webStyle } from "@/features/ui/webStyle";
+import { IconButton } from "../IconButton";
+import { Text } from "../Text";
+import { colors, sizes } from "../theme";
+import { webProps, webStyle } from "../webStyle";
 import { glyphs, noteName } from "@/shared/music/pitch";
 
 export interface SmallKeyboardProps {

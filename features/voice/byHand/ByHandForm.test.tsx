@@ -1,14 +1,17 @@
 import { act, fireEvent, render, screen, waitFor } from "@testing-library/react";
 import { ByHandForm } from "./ByHandForm";
+import { letGoOfByHandDraft } from "./useByHandDraft";
 
 const type = (id: string, text: string) => fireEvent.change(screen.getByTestId(id), { target: { value: text } });
 const valueOf = (id: string) => (screen.getByTestId(id) as HTMLInputElement).value;
 const send = () => act(async () => fireEvent.submit(screen.getByRole("form")));
 
 function open(onKeep = jest.fn(), voice: Parameters<typeof ByHandForm>[0]["voice"] = null) {
-  render(<ByHandForm voice={voice} busy={false} refusal={null} onKeep={onKeep} />);
+  render(<ByHandForm place="new" voice={voice} busy={false} refusal={null} onKeep={onKeep} />);
   return onKeep;
 }
+
+beforeEach(() => sessionStorage.clear());
 
 it("tells each fault at its field, keeps what was typed, and keeps nothing", async () => {
   const onKeep = open();
@@ -63,4 +66,37 @@ it("begins with the notes that the voice has", () => {
     "G3",
     "A4",
   ]);
+});
+
+it("brings back what was typed and not kept after a reload, also where it is wrong, until one starts afresh", async () => {
+  const first = render(<ByHandForm place="new" voice={null} busy={false} refusal={null} onKeep={jest.fn()} />);
+  expect(screen.queryByTestId("by-hand-restored")).toBeNull();
+  type("by-hand-lowest", "F3");
+  type("by-hand-highest", "X4");
+  first.unmount();
+  open();
+  expect(["lowest", "highest"].map((name) => valueOf(`by-hand-${name}`))).toEqual(["F3", "X4"]);
+  expect(screen.getByTestId("by-hand-restored").textContent).toContain("did not keep");
+  await act(async () => fireEvent.click(screen.getByTestId("by-hand-afresh")));
+  expect(["lowest", "highest"].map((name) => valueOf(`by-hand-${name}`))).toEqual(["", ""]);
+  expect(screen.queryByTestId("by-hand-restored")).toBeNull();
+});
+
+it("shows another voice's own notes and not what was typed for this one", () => {
+  const first = render(<ByHandForm place="new" voice={null} busy={false} refusal={null} onKeep={jest.fn()} />);
+  type("by-hand-lowest", "F3");
+  first.unmount();
+  const voice = { range: { lowMidi: 50, highMidi: 70 }, comfort: { lowMidi: 52, highMidi: 67 } };
+  render(<ByHandForm place="other" voice={voice} busy={false} refusal={null} onKeep={jest.fn()} />);
+  expect(valueOf("by-hand-lowest")).toBe("D3");
+  expect(screen.queryByTestId("by-hand-restored")).toBeNull();
+});
+
+it("has nothing to bring back once the notes were kept", async () => {
+  const first = render(<ByHandForm place="new" voice={null} busy={false} refusal={null} onKeep={jest.fn()} />);
+  type("by-hand-lowest", "F3");
+  letGoOfByHandDraft("new");
+  first.unmount();
+  open();
+  expect(valueOf("by-hand-lowest")).toBe("");
 });

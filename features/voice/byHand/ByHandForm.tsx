@@ -15,8 +15,11 @@ import type { SingingVoice } from "@/shared/keys/keyScore";
 import { readByHand, usualComfort, type ByHandFields } from "./byHand";
 import { NoteLadder } from "./NoteLadder";
 import { noteWord } from "../noteWords";
+import { useByHandDraft, useNoted } from "./useByHandDraft";
 
 export interface ByHandFormProps {
+  /** under which what was typed is found again after a reload */
+  place: string;
   /** what the voice has now, to start from */
   voice: SingingVoice | null;
   busy: boolean;
@@ -44,15 +47,17 @@ const resolver: Resolver<ByHandFields> = (values) => {
 };
 
 /** The four notes of a voice, typed or tapped. What was typed stays, also where it is wrong. */
-export function ByHandForm({ voice, busy, refusal, onKeep }: ByHandFormProps) {
-  const { control, handleSubmit, setValue, getValues, watch, trigger, formState } = useForm<ByHandFields>({
-    defaultValues: fieldsOf(voice),
+export function ByHandForm({ place, voice, busy, refusal, onKeep }: ByHandFormProps) {
+  const draft = useByHandDraft(place, fieldsOf(voice));
+  const { control, handleSubmit, setValue, getValues, watch, trigger, reset, formState } = useForm<ByHandFields>({
+    defaultValues: draft.start,
     resolver,
     mode: "onTouched",
   });
   const phone = useLayout() === "phone";
   const [active, setActive] = useState<keyof ByHandFields>("lowest");
   const values = watch();
+  useNoted(values, draft.note);
   const set = (name: keyof ByHandFields, midi: number) => {
     setValue(name, noteName(midi), { shouldDirty: true });
     if (formState.isSubmitted || formState.errors[name]) void trigger();
@@ -68,6 +73,29 @@ export function ByHandForm({ voice, busy, refusal, onKeep }: ByHandFormProps) {
     // Two taps are a voice: the second one is the highest note.
     if (active === "lowest" && getValues("highest") === "") setActive("highest");
   };
+  const found = draft.found && (
+    <Notice
+      kind="good"
+      testID="by-hand-restored"
+      title="Your notes are back"
+      action={
+        <Button
+          kind="text"
+          small
+          label="Start afresh"
+          onPress={() => {
+            reset(draft.base);
+            draft.giveUp();
+            // The button that was pressed is gone with its notice.
+            document.querySelector("h1")?.focus({ preventScroll: true });
+          }}
+          testID="by-hand-afresh"
+        />
+      }
+    >
+      What you entered and did not keep stands here again.
+    </Notice>
+  );
   const refused = refusal !== null && (
     <Notice kind="error" title="Not kept">
       {refusal}
@@ -129,6 +157,7 @@ export function ByHandForm({ voice, busy, refusal, onKeep }: ByHandFormProps) {
     const [low, high, ...comfort] = rows;
     return (
       <Form label="Notes of your voice" onSubmit={() => void keep()} gap={16}>
+        {found}
         <View style={pairs}>{[low, high].map((row) => row && fieldOf(row))}</View>
         {ladder}
         <View style={pairs}>{comfort.map(fieldOf)}</View>
@@ -142,6 +171,7 @@ export function ByHandForm({ voice, busy, refusal, onKeep }: ByHandFormProps) {
   }
   return (
     <Form label="Notes of your voice" onSubmit={() => void keep()} gap={20}>
+      {found}
       <View style={{ flexDirection: "row", gap: 64, alignItems: "flex-start" }}>
         <View style={{ gap: 20, flexGrow: 1, flexBasis: 0 }}>
           {rows.map(fieldOf)}

@@ -7,6 +7,7 @@ import { ByHandForm } from "./ByHandForm";
 import { chooseVoice, useChosenVoiceId } from "../chosenVoice";
 import { singingVoiceOf } from "../singingVoiceOf";
 import { pickVoice } from "../useSingingVoice";
+import { letGoOfByHandDraft } from "./useByHandDraft";
 import { newVoice, useSaveVoice, voiceQueries } from "../voiceQueries";
 import { useState } from "react";
 
@@ -34,6 +35,7 @@ export function ByHandScreen({ voiceId, onKept }: ByHandScreenProps) {
       <QueryState query={both} title="Your voices could not be opened">
         {(data) => {
           const voice = pickVoice(data.voices, voiceId, chosenId) ?? fresh;
+          const place = voice === fresh ? "new" : voice.id;
           return (
             <View style={{ gap: 16, paddingTop: 8, maxWidth: 1040 }}>
               <Text tone="soft">
@@ -42,6 +44,8 @@ export function ByHandScreen({ voiceId, onKept }: ByHandScreenProps) {
                   : `These notes are for ${voice.name}. Its takes stay as they are.`}
               </Text>
               <ByHandForm
+                key={place}
+                place={place}
                 voice={singingVoiceOf(voice, data.takes)}
                 busy={save.isPending}
                 refusal={save.error ? `${save.error.message} What you entered is still here.` : null}
@@ -50,6 +54,7 @@ export function ByHandScreen({ voiceId, onKept }: ByHandScreenProps) {
                     { ...voice, byHand: { range, comfort } },
                     {
                       onSuccess: () => {
+                        letGoOfByHandDraft(place);
                         chooseVoice(voice.id);
                         onKept();
                       },

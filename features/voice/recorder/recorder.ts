@@ -180,7 +180,7 @@ function afterResult(state: RecorderState & { step: "result" }, event: RecorderE
     case "judgeWhole":
       return part ? resultOf({ ...take, report: part.whole }) : state;
     case "broken":
-      return { ...state, judgingPart: false, refusedPart: "That part could not be read. The take is as it was." };
+      return { ...state, judgingPart: false, refusedPart: "That part could not be read." };
     case "judged": {
       if (!state.judgingPart || !event.part) return state;
       const { report } = event;

@@ -12,6 +12,8 @@ import { OtherWays, type OtherWaysProps } from "./OtherWays";
 export interface RefusalPageProps {
   words: FailureWords;
   again: { icon: IconName; label: string; onPress: () => void; testID: string };
+  /** what was there before and is still there */
+  back?: { label: string; onPress: () => void } | null;
   /** the way that was tried */
   except: OtherWaysProps["except"];
   testID: string;
@@ -21,18 +23,19 @@ export interface RefusalPageProps {
  * No notes came out: why, what is safe, what to do, and the other ways on. On a phone the next try is under the thumb;
  * where there is room it stands with its reason, and the other ways beside them.
  */
-export function RefusalPage({ words, again, except, testID }: RefusalPageProps) {
+export function RefusalPage({ words, again, back = null, except, testID }: RefusalPageProps) {
   const layout = useLayout();
   const phone = layout === "phone";
   const wide = layout === "wide";
+  const buttons = (
+    <View style={phone ? { gap: 10 } : { flexDirection: "row", flexWrap: "wrap", gap: 10, marginTop: 6 }}>
+      <Button {...again} />
+      {back && <Button kind="secondary" {...back} testID="refusal-back" />}
+    </View>
+  );
   const column = wide ? { flexGrow: 1, flexBasis: 0, maxWidth: 560 } : { maxWidth: 560 };
   return (
-    <Screen
-      title={words.title}
-      crumb={{ label: "Voice", href: "/voice" }}
-      wide
-      footer={phone ? <Button {...again} /> : undefined}
-    >
+    <Screen title={words.title} crumb={{ label: "Voice", href: "/voice" }} wide footer={phone ? buttons : undefined}>
       <View
         style={{
           flexDirection: wide ? "row" : "column",
@@ -51,7 +54,7 @@ export function RefusalPage({ words, again, except, testID }: RefusalPageProps) 
             </View>
             <Text tone="soft">{words.safe}</Text>
             <Text>{words.next}</Text>
-            {!phone && <Button {...again} style={{ alignSelf: "flex-start", marginTop: 6 }} />}
+            {!phone && buttons}
           </Card>
         </View>
         <View style={column}>

@@ -38,7 +38,7 @@ function Step({
   restoring: boolean;
   onKept: SingScreenProps["onKept"];
 }) {
-  const { state, live, sing, stop, leave } = recorder;
+  const { state, live, sing, stop, leave, earlier, goBack } = recorder;
   const again = () => sing(wantsCountIn());
   switch (state.step) {
     case "idle":
@@ -58,7 +58,7 @@ function Step({
     case "judging":
       return <Waiting words={`Reading ${Math.max(1, Math.round(state.seconds))} s of singing`} />;
     case "failure":
-      return <TakeFailure failure={state.failure} onAgain={again} />;
+      return <TakeFailure failure={state.failure} onAgain={again} onBack={earlier && goBack} />;
     case "result":
       return (
         <HeardResult

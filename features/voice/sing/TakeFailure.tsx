@@ -5,10 +5,12 @@ import type { Failure } from "../recorder/recorder";
 export interface TakeFailureProps {
   failure: Failure;
   onAgain: () => void;
+  /** back to the take before; null where there is none */
+  onBack: (() => void) | null;
 }
 
 /** No range came out of a take or of a recording. */
-export function TakeFailure({ failure, onAgain }: TakeFailureProps) {
+export function TakeFailure({ failure, onAgain, onBack }: TakeFailureProps) {
   const file = failure.stoppedBy === "file";
   return (
     <RefusalPage
@@ -20,6 +22,7 @@ export function TakeFailure({ failure, onAgain }: TakeFailureProps) {
         onPress: onAgain,
         testID: "sing-again",
       }}
+      back={onBack && { label: file ? "Back to what was heard" : "Back to the take before", onPress: onBack }}
       except={file ? "recording" : "sing"}
       testID={`take-failure-${failure.kind}`}
     />

@@ -2,6 +2,7 @@ import { useRef, useState } from "react";
 import { View } from "react-native";
 import { Button } from "@/features/ui/Button";
 import { Icon } from "@/features/ui/Icon";
+import { Notice } from "@/features/ui/Notice";
 import { Screen } from "@/features/ui/Screen";
 import { Text } from "@/features/ui/Text";
 import { colors, sizes } from "@/features/ui/theme";
@@ -12,6 +13,10 @@ import { OtherWays } from "../sing/OtherWays";
 export interface ChooseRecordingProps {
   /** it is not known yet whether there is a take already */
   waiting: boolean;
+  /** a recording that was not read to its end when the page was left or loaded again */
+  unread: string | null;
+  /** back to what was heard before; null where nothing was */
+  onBack: (() => void) | null;
   onChoose: (file: File) => void;
 }
 
@@ -19,7 +24,7 @@ const column = { flexGrow: 1, flexBasis: 0, maxWidth: 560 } as const;
 const accepted = ".wav,.mp3,.m4a,.ogg,.oga,.opus,.webm,.flac,audio/*";
 
 /** Which recordings can be read, and the button that chooses one; on a wide page it may be dropped. */
-export function ChooseRecording({ waiting, onChoose }: ChooseRecordingProps) {
+export function ChooseRecording({ waiting, unread, onBack, onChoose }: ChooseRecordingProps) {
   const input = useRef<HTMLInputElement>(null);
   const [over, setOver] = useState(false);
   const layout = useLayout();
@@ -69,6 +74,29 @@ export function ChooseRecording({ waiting, onChoose }: ChooseRecordingProps) {
         }
       >
         <View style={[{ gap: 20 }, wide ? column : null]}>
+          {unread !== null && (
+            <Notice kind="caution" title="Choose the recording again" testID="upload-unread">
+              {`This page was left or loaded again before ${unread} was read to its end. Nothing was kept, and the file is as it was.`}
+            </Notice>
+          )}
+          {onBack && (
+            <Notice
+              kind="good"
+              title="What was heard is still here"
+              action={
+                <Button
+                  kind="text"
+                  small
+                  label="Back to what was heard"
+                  onPress={onBack}
+                  style={{ alignSelf: "flex-start", marginLeft: -8 }}
+                  testID="upload-back"
+                />
+              }
+            >
+              It stays until another recording is read.
+            </Notice>
+          )}
           <Text variant="body" style={{ fontSize: 20, lineHeight: 28 }}>
             Choose a recording of one voice singing alone, and see which notes are yours.
           </Text>

@@ -17,7 +17,7 @@ export interface UploadScreenProps {
 /** A recording in the place of singing: chosen, read on this device, and then the same result as after singing. */
 export function UploadScreen({ onKept }: UploadScreenProps) {
   const recorder = useRecorder();
-  const { state, restoring, read, leave } = recorder;
+  const { state, restoring, earlier, unread, read, startOver, goBack, leave } = recorder;
   const [name, setName] = useState("");
   useFocusOnChange(state.step);
   const choose = (file: File) => {
@@ -27,14 +27,14 @@ export function UploadScreen({ onKept }: UploadScreenProps) {
   return (
     <>
       {pageFor(state, {
-        before: <ChooseRecording waiting={restoring} onChoose={choose} />,
-        working: <ReadingRecording name={name} state={state} onCancel={leave} />,
-        failure: (failure) => <TakeFailure failure={failure} onAgain={leave} />,
+        before: <ChooseRecording waiting={restoring} unread={unread} onBack={earlier && goBack} onChoose={choose} />,
+        working: <ReadingRecording name={name} state={state} onCancel={startOver} />,
+        failure: (failure) => <TakeFailure failure={failure} onAgain={startOver} onBack={earlier && goBack} />,
         result: (result) => (
           <HeardResult
             result={result}
             recorder={recorder}
-            again={{ label: "Another recording", onPress: leave }}
+            again={{ label: "Another recording", onPress: startOver }}
             onKept={(next) => {
               leave();
               onKept(next);

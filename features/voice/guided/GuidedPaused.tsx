@@ -43,7 +43,7 @@ export function GuidedPaused({ state: { run, next, cause }, onTell }: GuidedPaus
       }
     >
       <View style={{ gap: 18, paddingTop: 12, maxWidth: 560 }} testID="guided-paused">
-        <Text>{`${interruptionWords(cause)}. What you held until then is still here.`}</Text>
+        <Text>{`${cause === "reloaded" ? "This page was left or loaded again" : interruptionWords(cause)}. What you held until then is still here.`}</Text>
         <Card style={{ gap: 6 }}>
           <Heading level={2}>Held so far</Heading>
           <Text variant="number" style={{ lineHeight: 52 }}>

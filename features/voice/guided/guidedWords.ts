@@ -1,5 +1,5 @@
-import type { FailureKind } from "../recorder/recorder";
-import { failureWords, type FailureWords } from "../sing/failureWords";
+import type { FailureKind, Interruption } from "../recorder/recorder";
+import { failureWords, mendWords, type FailureWords } from "../sing/failureWords";
 import { noteWord } from "../noteWords";
 import type { TryOutcome } from "./hearing/guidedHold";
 import { farthest, type GuidedEnd, type GuidedRun, type GuidedState } from "./guidedSteps";
@@ -89,8 +89,9 @@ export function failedWords(why: (GuidedState & { step: "failed" })["why"]): Fai
   const unavailable: FailureKind[] = ["refused", "no-microphone", "insecure", "busy", "unsupported", "broken"];
   const kind = unavailable.find((one) => one === why);
   if (kind) return failureWords({ kind, report: null, seconds: 0, stoppedBy: null });
-  const broken = failureWords({ kind: "interrupted", report: null, seconds: 0, stoppedBy: why as "taken" });
-  return { ...broken, next: "Start again when it is free." };
+  const cause = why as Interruption;
+  const broken = failureWords({ kind: "interrupted", report: null, seconds: 0, stoppedBy: cause });
+  return { ...broken, next: mendWords(cause, "start again") };
 }
 
 /** For those who listen to the screen. The tone itself must not be talked over. */

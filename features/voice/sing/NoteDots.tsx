@@ -3,16 +3,19 @@ import { colors } from "@/features/ui/theme";
 import { webStyle } from "@/features/ui/webStyle";
 
 export interface NoteDotsProps {
-  clear: number;
-  all: number;
+  /** "Heard clearly in 14 of 16 notes." */
+  words: string;
 }
 
-/** One dot a note, filled where it was heard clearly; the words stand beside it. */
-export function NoteDots({ clear, all }: NoteDotsProps) {
+/** One dot a note, filled where it was heard clearly: the very numbers of the words that stand beside it. */
+export function NoteDots({ words }: NoteDotsProps) {
+  const [clear = 0, all = 0] = (words.match(/\d+/g) ?? []).map(Number);
+  if (all === 0) return null;
   const columns = Math.min(12, Math.max(8, Math.ceil(all / 2)));
   return (
     <View
       aria-hidden
+      testID="note-dots"
       style={webStyle({ display: "grid", gridTemplateColumns: `repeat(${columns}, 9px)`, gap: 4, flexShrink: 0 })}
     >
       {Array.from({ length: Math.min(all, 3 * columns) }, (_, k) => (

@@ -66,10 +66,6 @@ export function TakeResult({ take, onAgain, onSongs, onFelt, trail }: TakeResult
 
 function ResultWords({ take, onAgain, onSongs, onFelt, trail }: TakeResultProps) {
   const { report, stoppedBy, processed } = take;
-  const judged = report.notes.filter(
-    ({ sustained, clear, start, end }) => sustained || clear || end - start >= 0.15,
-  ).length;
-  const clear = report.notes.filter((note) => note.clear).length;
   const [first = "", ...others] = report.reasons;
   return (
     <View style={{ borderTopWidth: 1, borderColor: colors.line, paddingTop: 14, gap: 12 }}>
@@ -82,7 +78,7 @@ function ResultWords({ take, onAgain, onSongs, onFelt, trail }: TakeResultProps)
         <Text variant="small" style={{ fontWeight: "600", flexShrink: 1 }} testID="take-clear">
           {first.replace(/\.$/, "")}
         </Text>
-        <NoteDots clear={clear} all={Math.max(judged, clear)} />
+        <NoteDots words={first} />
       </View>
       <NextStep words={report.nextStep} onPress={report.advice === "go-on" ? onSongs : onAgain} />
       <Why take={take} certainty={report.certainty} reasons={others} />

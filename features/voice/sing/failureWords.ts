@@ -27,9 +27,23 @@ export function interruptionWords(stoppedBy: Interruption): string {
   return causes[stoppedBy];
 }
 
-/** "A call or another program took the microphone at 4 s." */
+/** "A call or another program took the microphone at 4 s."; in the very first second, without the time. */
 export function causeWords(stoppedBy: Interruption, seconds: number): string {
-  return `${causes[stoppedBy]} at ${Math.floor(seconds)} s.`;
+  return seconds < 1 ? `${causes[stoppedBy]}.` : `${causes[stoppedBy]} at ${Math.floor(seconds)} s.`;
+}
+
+const mends: Record<Interruption, string> = {
+  taken: "Wait until it is free",
+  unplugged: "Plug it in or switch it on",
+  muted: "Unmute it",
+  hidden: "Keep this page in front",
+  stalled: "Close what else is at work on this device",
+  reloaded: "Leave the page open",
+};
+
+/** What to do before the next try, and the try: "Unmute it, then sing again." */
+export function mendWords(stoppedBy: Interruption, then: string): string {
+  return `${mends[stoppedBy]}, then ${then}.`;
 }
 
 export function isInterruption(stoppedBy: StoppedBy | null): stoppedBy is Interruption {
@@ -120,7 +134,7 @@ export function failureWords({ kind, report, seconds, stoppedBy, file = null }: 
       title,
       happened: `${causeWords(stoppedBy, seconds)}${short}`,
       safe: nothingKept,
-      next: "Sing again when it is free.",
+      next: mendWords(stoppedBy, "sing again"),
     };
   }
   if (report) return { title, happened: report.sentence, safe: nothingKept, next: report.nextStep };

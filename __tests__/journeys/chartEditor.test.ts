@@ -1,6 +1,7 @@
 import type { Page } from "playwright-core";
 import { axeFaults } from "./axeFaults";
 import type { Viewport } from "./browser";
+import { pageTasks } from "./pageTasks";
 import { signInAsMaren } from "./signIn";
 import { setStage } from "./stage";
 
@@ -159,3 +160,33 @@ test("two tabs at one song: the second is told, both changes go together, and no
   expect(errors).toEqual([]);
   await context.close();
 }, 120_000);
+
+/** A chart as long as one may be. */
+const longest = (unit: string) => unit.repeat(Math.ceil(100_000 / unit.length)).slice(0, 99_990);
+
+test.each([
+  ["phone", "one line of words", longest("low tide and the harbour ")],
+  ["wide", "two thousand verses", longest("[Verse 1]\nG        C   G\nLow tide and the harbour\n\n")],
+] as const)(
+  "on the %s %s, as long as a chart may be, are pasted and the field answers",
+  async (viewport, _, text) => {
+    const { context, page, errors } = await stage.open("none", viewport);
+    await context.grantPermissions(["clipboard-read", "clipboard-write"]);
+    await page.goto("/songs/new");
+    await page.getByTestId("song-title").fill("All of it");
+    await page.evaluate((long) => navigator.clipboard.writeText(long), text);
+    await page.getByTestId("song-chart").focus();
+    // By the clipboard, as a person does: typing 8,000 lines in one go keeps the browser itself busy for a minute.
+    const [task = Infinity] = await pageTasks(page, async () => {
+      await page.keyboard.press("Control+v");
+      await page.getByTestId("preview").getByText("harbour").first().waitFor();
+      await page.keyboard.type("!");
+    });
+    expect(await chart(page)).toBe(`${text}!`);
+    // Processor time in ms; it was 12 s on the phone and minutes on the wide page.
+    expect(task).toBeLessThan(2000);
+    expect(errors).toEqual([]);
+    await context.close();
+  },
+  90_000,
+);

@@ -139,9 +139,10 @@ function Row({ lyrics, chords, size }: { lyrics: string; chords: readonly ChartT
   const sung = lyrics.trim() !== "";
   const over: CSSProperties = { position: "relative", height: size * 1.35 };
   const words: CSSProperties = { display: "block", whiteSpace: "pre", lineHeight: sung ? `${size * 1.3}px` : "4px" };
+  const cut = lyrics.length > longest ? lyrics.lastIndexOf(" ", longest) + 1 || longest : lyrics.length;
   return (
     <div data-mono="" style={{ ...wholes, font: `400 ${size}px/${size * 1.2}px ${fonts.mono}`, color: colors.ink }}>
-      {chartCells(lyrics, chords).map((cell, index) => (
+      {chartCells(lyrics.slice(0, cut), chords).map((cell, index) => (
         <div key={index} style={cellStyle}>
           {cell.chords.length > 0 && (
             <div style={over}>
@@ -155,9 +156,15 @@ function Row({ lyrics, chords, size }: { lyrics: string; chords: readonly ChartT
           </span>
         </div>
       ))}
+      {cut < lyrics.length && (
+        <span style={{ ...words, whiteSpace: "pre-wrap", overflowWrap: "anywhere" }}>{lyrics.slice(cut)}</span>
+      )}
     </div>
   );
 }
+
+/** Behind so many letters no chord stands over a line: what is left of it is drawn in one piece. */
+const longest = 2100;
 
 const tones: Partial<Record<ChartToken["kind"], CSSProperties>> = {
   chord: { color: colors.plum },

@@ -7,18 +7,31 @@ export interface ShownSection {
   lines: readonly ChartLine[];
 }
 
-/** The first lines of a chart, and how many more there are. */
-export function firstLines(chart: Chart, most: number): { sections: ShownSection[]; rest: number } {
+/** A line longer than so many letters takes up the room of several. */
+const lettersInLine = 80;
+
+/** The first lines of a chart, how many these are, and how many more there are, headings among them. There is always one, however long it is. */
+export function firstLines(chart: Chart, most: number): { sections: ShownSection[]; shown: number; rest: number } {
   const sections: ShownSection[] = [];
   let room = most;
+  let shown = 0;
   let rest = 0;
   for (const { label, lines } of chart.sections) {
     const used = lines.slice(firstUsed(lines), lastUsed(lines) + 1);
-    if (room > 0 && (label !== null || used.length > 0)) sections.push({ label, lines: used.slice(0, room) });
-    rest += Math.max(0, used.length - room);
-    room = Math.max(0, room - used.length);
+    const named = label !== null;
+    const opens = room > 0 && (named || used.length > 0);
+    // A heading takes a line too, so that thousands of bare ones are not drawn at once.
+    if (opens && used.length === 0) room -= 1;
+    let fits = 0;
+    while (fits < used.length && room > 0) {
+      room -= Math.max(1, Math.ceil(writtenIn(used[fits]!).length / lettersInLine));
+      fits += 1;
+    }
+    if (opens) sections.push({ label, lines: fits === used.length ? used : used.slice(0, fits) });
+    shown += fits;
+    rest += opens || !named ? used.length - fits : used.length + 1;
   }
-  return { sections, rest };
+  return { sections, shown, rest };
 }
 
 /** A line as it is drawn: which section of those shown, and which line in it. */

@@ -20,7 +20,7 @@ export interface ChartPreviewProps {
 
 /** How a chart reads while it is typed. Drawn anew only when the chart changed; goes along with the caret. */
 export const ChartPreview = memo(function ChartPreview({ chart, row, height }: ChartPreviewProps) {
-  const { rest } = firstLines(chart, most);
+  const { shown, rest } = firstLines(chart, most);
   const place = useMemo(() => (row === null ? null : shownPlace(chart, row)), [chart, row]);
   const box = useRef<HTMLDivElement>(null);
   useEffect(() => {
@@ -55,7 +55,7 @@ export const ChartPreview = memo(function ChartPreview({ chart, row, height }: C
         )}
         {rest > 0 && (
           <Text variant="small" tone="soft" testID="preview-rest">
-            {`These are the first ${most} lines. The rest is kept as typed; all of it is shown on the song's own page.`}
+            {`These are the first ${shown} lines. The rest is kept as typed; all of it is shown on the song's own page.`}
           </Text>
         )}
       </div>

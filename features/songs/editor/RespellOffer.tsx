@@ -1,4 +1,4 @@
-import { useMemo } from "react";
+import { useDeferredValue, useMemo } from "react";
 import { Button } from "@/features/ui/Button";
 import { Notice } from "@/features/ui/Notice";
 import type { KeyName } from "@/shared/music/keyName";
@@ -18,7 +18,8 @@ export function RespellOffer({
   writtenKey: KeyName | null;
   onText: (text: string) => void;
 }) {
-  const offer = useMemo(() => writtenKey && respellChart(text, writtenKey), [text, writtenKey]);
+  const read = useDeferredValue(text);
+  const offer = useMemo(() => writtenKey && respellChart(read, writtenKey), [read, writtenKey]);
   if (!offer || !writtenKey) return null;
   const sign = glyphs(keySign(writtenKey));
   const some = offer.changes.slice(0, shown).map(({ from, to }) => `${glyphs(to)} for ${glyphs(from)}`);
@@ -33,7 +34,7 @@ export function RespellOffer({
           kind="text"
           small
           label={`Respell in ${sign}`}
-          onPress={() => onText(offer.text)}
+          onPress={() => onText(read === text ? offer.text : (respellChart(text, writtenKey)?.text ?? text))}
           testID="respell-now"
         />
       }

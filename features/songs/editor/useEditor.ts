@@ -29,9 +29,13 @@ export function useEditor(first: SongDraft, id: string | null): Editor {
   const [mode, setMode] = useState<EditMode>("type");
   // While chords are placed the key may be found anew with each; the palette keeps its order under the thumb.
   const [pinned, setPinned] = useState<KeyName | null>(null);
-  const placing = usePlacing(draft.chart, reading.chart, mode === "place" ? (pinned ?? key) : key, (chart) =>
-    change({ chart }),
-  );
+  const placing = usePlacing({
+    text: draft.chart,
+    chart: reading.chart,
+    key: mode === "place" ? (pinned ?? key) : key,
+    placing: mode === "place",
+    onText: (chart) => change({ chart }),
+  });
   const goTo = (next: EditMode) => {
     setPinned(key);
     setMode(next);

@@ -1,4 +1,4 @@
-import { useState } from "react";
+import { useDeferredValue, useMemo, useState } from "react";
 import { View } from "react-native";
 import { Button } from "@/features/ui/Button";
 import { Heading } from "@/features/ui/Heading";
@@ -18,9 +18,16 @@ export interface PartListProps {
   level?: 2 | 3;
 }
 
+/** So many parts are listed; more are asked for. */
+const atOnce = 60;
+
 /** The parts of the song in order: to name, to repeat, to move, to copy, to take out and to add. */
 export function PartList({ text, onText, onShow, level = 2 }: PartListProps) {
-  const parts = chartParts(text);
+  const read = useDeferredValue(text);
+  const parts = useMemo(() => chartParts(read), [read]);
+  const [most, setMost] = useState(atOnce);
+  // What stands before the first heading stays first.
+  const first = parts[0]?.name === null ? 1 : 0;
   const [open, setOpen] = useState<number | null>(null);
   const [adding, setAdding] = useState<NamedKind>("verse");
   const put = (now: string | null) => {
@@ -41,7 +48,7 @@ export function PartList({ text, onText, onShow, level = 2 }: PartListProps) {
         </Text>
       )}
       <View role="list" style={{ borderTopWidth: parts.length > 0 ? 1 : 0, borderColor: colors.line }}>
-        {parts.map((part, index) => {
+        {parts.slice(0, most).map((part, index) => {
           const name = part.name ?? "Before the first part";
           return (
             <View
@@ -68,13 +75,13 @@ export function PartList({ text, onText, onShow, level = 2 }: PartListProps) {
                     <IconButton
                       icon="up"
                       label={`Move ${name} up`}
-                      disabled={movePart(text, index, index - 1) === null}
+                      disabled={index <= first}
                       onPress={() => move(index, index - 1)}
                     />
                     <IconButton
                       icon="down"
                       label={`Move ${name} down`}
-                      disabled={movePart(text, index, index + 1) === null}
+                      disabled={index === parts.length - 1}
                       onPress={() => move(index, index + 1)}
                     />
                   </>
@@ -97,6 +104,15 @@ export function PartList({ text, onText, onShow, level = 2 }: PartListProps) {
           );
         })}
       </View>
+      {parts.length > most && (
+        <Button
+          kind="text"
+          small
+          label={`Show more of the ${parts.length} parts`}
+          onPress={() => setMost(most + atOnce)}
+          testID="more-parts"
+        />
+      )}
       <View style={{ flexDirection: "row", gap: 8, alignItems: "flex-end" }}>
         <View style={{ flexGrow: 1, flexShrink: 1, minWidth: 0 }}>
           <Select<NamedKind>
@@ -117,7 +133,9 @@ export function PartList({ text, onText, onShow, level = 2 }: PartListProps) {
               adding,
               parts.map((part) => part.name),
             );
-            if (put(addPart(text, named))) setOpen(parts.length);
+            if (!put(addPart(text, named))) return;
+            setMost(Math.max(most, parts.length + 1));
+            setOpen(parts.length);
           }}
           testID="add-part"
         />

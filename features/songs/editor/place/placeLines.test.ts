@@ -31,3 +31,16 @@ test("every place says what it is", () => {
 test("tabs are counted out, in every line by itself", () => {
   expect(withoutTabs("a\tb\n\tc")).toBe("a       b\n        c");
 });
+
+test("on a line of 100,000 letters there are places as far as chords can be read, and they are found at once", () => {
+  const words = "low tide and the harbour ".repeat(4000);
+  const start = process.cpuUsage();
+  const [line, more] = placeItems(words);
+  const { user } = process.cpuUsage(start);
+  const columns = (line as PlaceLine).words.flat().map(({ column }) => column);
+  expect(Math.max(...columns)).toBeLessThanOrEqual(2001);
+  expect(columns.length).toBeGreaterThan(400);
+  expect(more).toMatchObject({ kind: "remark", text: expect.stringMatching(/…$/) as string });
+  // µs; it took 12 s when each place looked through the whole line.
+  expect(user).toBeLessThan(1_500_000);
+});

@@ -34,6 +34,9 @@ export function withoutTabs(text: string): string {
   return text.includes("\t") ? text.split("\n").map(expandTabs).join("\n") : text;
 }
 
+/** A row of chords longer than this is none: behind it, no chord could be placed. */
+const longest = 2000;
+
 /** A chart as headings and lines of places. */
 export function placeItems(text: string): PlaceItem[] {
   const chart = parseChart(withoutTabs(text));
@@ -48,7 +51,9 @@ export function placeItems(text: string): PlaceItem[] {
     if (line.kind === "comment") items.push({ kind: "remark", row: -1, text: line.text.trim() });
     else if (row !== null) {
       const words = "lyrics" in line ? line.lyrics : "";
-      items.push({ kind: "line", row, words: wordsOf(words, "chords" in line ? line.chords : []) });
+      items.push({ kind: "line", row, words: wordsOf(words.slice(0, longest), "chords" in line ? line.chords : []) });
+      if (words.length > longest)
+        items.push({ kind: "remark", row: -1, text: `${words.slice(longest, longest + 40)}…` });
     }
   }
   return items;
@@ -61,6 +66,7 @@ function wordsOf(lyrics: string, chords: readonly ChartToken[]): PlaceCell[][] {
   const starts = [...new Set([...syllableStarts(lyrics), ...chords.map(({ column }) => column), behind])];
   starts.sort((a, b) => a - b);
   const words: PlaceCell[][] = [];
+  const over = new Map([...chords].reverse().map((chord) => [chord.column, chord]));
   let inside = false;
   starts.forEach((column, index) => {
     const piece = lyrics.slice(column, starts[index + 1] ?? lyrics.length);
@@ -70,7 +76,7 @@ function wordsOf(lyrics: string, chords: readonly ChartToken[]): PlaceCell[][] {
       text,
       word: wordAround(lyrics, column),
       gap: piece.length - piece.trimEnd().length,
-      chord: chords.find((chord) => chord.column === column) ?? null,
+      chord: over.get(column) ?? null,
     };
     if (inside) words.at(-1)!.push(cell);
     else words.push([cell]);
@@ -84,7 +90,8 @@ function wordsOf(lyrics: string, chords: readonly ChartToken[]): PlaceCell[][] {
 function wordAround(lyrics: string, column: number): string {
   if ((lyrics[column] ?? " ") === " ") return "";
   const start = lyrics.lastIndexOf(" ", column) + 1;
-  const word = lyrics.slice(start).split(" ")[0] ?? "";
+  const end = lyrics.indexOf(" ", start);
+  const word = lyrics.slice(start, end < 0 ? undefined : end);
   return word.replace(/^[^\p{L}\p{N}]+|[^\p{L}\p{N}]+$/gu, "");
 }
 

@@ -21,11 +21,20 @@ export interface Placing {
   remove: () => void;
 }
 
+interface Asked {
+  text: string;
+  chart: Chart;
+  key: KeyName | null;
+  /** whether chords are being placed: only then are the places worked out, which takes a while for a long chart */
+  placing: boolean;
+  onText: (text: string) => void;
+}
+
 /** Putting chords over syllables: a place is chosen, then a chord. All of it changes the text of the chart. */
-export function usePlacing(text: string, chart: Chart, key: KeyName | null, onText: (text: string) => void): Placing {
+export function usePlacing({ text, chart, key, placing, onText }: Asked): Placing {
   const [spot, setSpot] = useState<ChartSpot | null>(null);
   const [refusal, setRefusal] = useState<string | null>(null);
-  const items = useMemo(() => placeItems(text), [text]);
+  const items = useMemo(() => (placing ? placeItems(text) : []), [text, placing]);
   const palette = useMemo(() => chordPalette(chart, key), [chart, key]);
   const cell = cellAt(items, spot);
   const plain = withoutTabs(text);

@@ -51,6 +51,17 @@ test.each(["phone", "wide"] as const)(
     await page.getByTestId("note-up").click();
     expect((await heard()).slice(3, 7)).toEqual(["D4", "E4", "F♯4", "D4"]);
 
+    // The last note is sung again: what is heard takes its place, and undoing brings it back.
+    if (viewport === "phone") {
+      await page.getByTestId("note-9").click();
+      await page.getByRole("radio", { name: "The chosen part" }).click();
+      await page.getByRole("button", { name: "Sing A3 to A3 again" }).waitFor();
+      await singFor(page, 4);
+      await page.getByText(/^\d+ notes heard\.$/).waitFor();
+      expect((await heard()).slice(0, 9)).toEqual([...names.slice(0, 4), "E4", "F♯4", "D4", "C♯4", "B3"]);
+      expect((await heard()).length).toBeGreaterThan(10);
+      await page.getByTestId("note-undo").click();
+    }
     // What is not kept yet is there after a reload, and undoing leads back to what is kept.
     await page.reload();
     await page.getByTestId("notes-restored").waitFor();

@@ -50,6 +50,10 @@ const parts: LazyPart[] = [
   () => import("./account/reset"),
   () => import("./account/confirm"),
   () => import("./account/unsubscribe"),
+  () => import("./account/security"),
+  () => import("./account/sessions"),
+  () => import("./account/mail"),
+  () => import("./account/data"),
   () => import("./+not-found"),
   () => import("@/shared/songs/melodyFile"),
 ];

@@ -40,6 +40,10 @@ export const clientRoutes = [
   "/account/reset",
   "/account/confirm",
   "/account/unsubscribe",
+  "/account/security",
+  "/account/sessions",
+  "/account/mail",
+  "/account/data",
 ] as const;
 
 const id = "[0-9a-fA-F]{8}(?:-[0-9a-fA-F]{4}){3}-[0-9a-fA-F]{12}";

@@ -9,6 +9,8 @@ import { Skeleton } from "@/features/ui/Skeleton";
 import { Text } from "@/features/ui/Text";
 import { UnitChoice } from "@/features/ui/UnitChoice";
 import { useLayout } from "@/features/ui/useLayout";
+import { AccountRows } from "./AccountRows";
+import { ConfirmNotice } from "./ConfirmNotice";
 import { MoveInNotice } from "./MoveInNotice";
 import { SignedInCard } from "./SignedInCard";
 import { ThemeChoice } from "./ThemeChoice";
@@ -16,7 +18,14 @@ import { VisitorCard } from "./VisitorCard";
 
 function Person() {
   const session = useSession();
-  if (session.account) return <SignedInCard account={session.account} />;
+  if (session.account)
+    return (
+      <>
+        <ConfirmNotice account={session.account} />
+        <SignedInCard account={session.account} />
+        <AccountRows />
+      </>
+    );
   if (session.status === "visitor") return <VisitorCard ended={session.ended} />;
   if (session.problem)
     return (

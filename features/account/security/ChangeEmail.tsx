@@ -1,0 +1,65 @@
+import { useState } from "react";
+import { http } from "@/features/api/httpClient";
+import { Card } from "@/features/ui/Card";
+import { Form } from "@/features/ui/Form";
+import { Heading } from "@/features/ui/Heading";
+import { Notice } from "@/features/ui/Notice";
+import { Text } from "@/features/ui/Text";
+import type { Account } from "@/shared/contract/account";
+import { checkAddress, checkKnownPassword } from "../forms/checkPassword";
+import { FormEnd } from "../forms/FormEnd";
+import { FormField, PasswordField } from "../forms/FormField";
+import { useAccountForm } from "../forms/useAccountForm";
+
+/** Another address for the account; the present one stays until the new one is confirmed. */
+export function ChangeEmail({ account }: { account: Account }) {
+  const [sentTo, setSentTo] = useState<string | null>(null);
+  const { form, refusal, problem, sending, submit } = useAccountForm({ email: "", password: "" }, async (typed) => {
+    setSentTo(null);
+    const email = typed.email.trim();
+    await http.post("/account/email", { email, password: typed.password });
+    setSentTo(email);
+    form.reset();
+  });
+  return (
+    <Card style={{ gap: 16 }}>
+      <Heading level={2}>E-mail address</Heading>
+      <Text variant="body" style={{ overflowWrap: "anywhere" } as object}>
+        {`${account.email}, ${account.confirmed ? "confirmed" : "not confirmed yet"}`}
+      </Text>
+      <Form label="Change the e-mail address" onSubmit={submit}>
+        <FormField
+          form={form}
+          name="email"
+          label="New e-mail address"
+          check={checkAddress}
+          autoComplete="email"
+          inputMode="email"
+          testID="new-email"
+        />
+        <PasswordField
+          form={form}
+          name="password"
+          label="Password"
+          check={checkKnownPassword}
+          autoComplete="current-password"
+          testID="email-password"
+        />
+        {sentTo !== null && (
+          <Notice kind="good" testID="email-asked">
+            {`A link is on its way to ${sentTo}. Until you open it, your address stays as it is.`}
+          </Notice>
+        )}
+        <FormEnd
+          small
+          refusal={refusal}
+          problem={problem}
+          sending={sending}
+          sendLabel="Change the address"
+          busyLabel="Sending the link"
+          testID="change-email"
+        />
+      </Form>
+    </Card>
+  );
+}

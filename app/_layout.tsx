@@ -8,7 +8,7 @@ import { MissingChunkBoundary } from "@/features/ui/MissingChunkBoundary";
 import { Shell } from "@/features/ui/Shell";
 import { ThemeProvider } from "@/features/ui/ThemeProvider";
 
-/** Everything that is fetched on demand: once it is here, the whole product works without a connection. */
+/** What is fetched on demand, so that the product works without a connection; pages that only speak with the server are left out. */
 const parts: LazyPart[] = [
   () => import("./songs/index"),
   () => import("./songs/[id]/index"),
@@ -46,14 +46,6 @@ const parts: LazyPart[] = [
   () => import("./account/index"),
   () => import("./account/sign-in"),
   () => import("./account/sign-up"),
-  () => import("./account/forgotten"),
-  () => import("./account/reset"),
-  () => import("./account/confirm"),
-  () => import("./account/unsubscribe"),
-  () => import("./account/security"),
-  () => import("./account/sessions"),
-  () => import("./account/mail"),
-  () => import("./account/data"),
   () => import("./+not-found"),
   () => import("@/shared/songs/melodyFile"),
 ];

@@ -44,6 +44,9 @@ export const clientRoutes = [
   "/account/sessions",
   "/account/mail",
   "/account/data",
+  "/admin",
+  "/admin/health",
+  "/admin/audit",
 ] as const;
 
 const id = "[0-9a-fA-F]{8}(?:-[0-9a-fA-F]{4}){3}-[0-9a-fA-F]{12}";

@@ -23,7 +23,7 @@ function Person() {
       <>
         <ConfirmNotice account={session.account} />
         <SignedInCard account={session.account} />
-        <AccountRows />
+        <AccountRows account={session.account} />
       </>
     );
   if (session.status === "visitor") return <VisitorCard ended={session.ended} />;

@@ -5,6 +5,7 @@ import { Icon } from "@/features/ui/Icon";
 import { Text } from "@/features/ui/Text";
 import { colors } from "@/features/ui/theme";
 import { webStyle } from "@/features/ui/webStyle";
+import type { Account } from "@/shared/contract/account";
 
 interface Row {
   href: Href;
@@ -19,12 +20,15 @@ const rows: Row[] = [
   { href: "/account/data" as Href, label: "Your data", hint: "About you, take it along, erase it" },
 ];
 
+const adminRow: Row = { href: "/admin" as Href, label: "Administration", hint: "People, health, security events" };
+
 /** The pages of the account, one row each. */
-export function AccountRows() {
+export function AccountRows({ account }: { account: Account }) {
+  const all = account.role === "admin" ? [...rows, adminRow] : rows;
   return (
     <Card style={{ padding: 0, paddingVertical: 4 }}>
       <View role="list">
-        {rows.map(({ href, label, hint }, k) => (
+        {all.map(({ href, label, hint }, k) => (
           <View
             key={label}
             role="listitem"

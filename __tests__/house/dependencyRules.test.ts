@@ -56,6 +56,11 @@ const seeded: Record<string, { file: string; source: string; needs?: string[] }>
     source: 'import "../contract/plain";',
     needs: ["shared/contract/plain.ts"],
   },
+  "engine-layer-coach": {
+    file: "shared/coach/k.ts",
+    source: 'import "../contract/plain";',
+    needs: ["shared/contract/plain.ts"],
+  },
   "ui-sees-shared": {
     file: "features/ui/l.ts",
     source: 'import "../songs/plain";',

@@ -21,7 +21,7 @@ export function askedWay(asked: AskedWay, key: KeyName, instrument: Instrument):
 }
 
 /** Whether shapes, retune and capo together sound in the key. */
-export function leadsInto(way: Moves, key: KeyName, instrument: Instrument): boolean {
+function leadsInto(way: Moves, key: KeyName, instrument: Instrument): boolean {
   const raise = fretSemitones(instrument, way.capo);
   if (raise === null || way.capo > Math.max(instrument.capoTo, 0)) return false;
   const sum = tonicPitchClass(way.shapeKey) + way.retune + raise;

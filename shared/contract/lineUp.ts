@@ -2,7 +2,7 @@ import { z } from "zod";
 import { tonicName } from "./song";
 
 /** Somebody who plays along. */
-export const player = z.strictObject({
+const player = z.strictObject({
   id: z.uuid(),
   name: z.string().trim().min(1, "Say who plays.").max(80),
   /** a preset, an own instrument, or one made in one key, such as "whistle-D" */

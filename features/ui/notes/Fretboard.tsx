@@ -11,7 +11,7 @@ import { webProps, webStyle } from "../webStyle";
 import { neckPlaces, placeWords, type NeckPlace } from "./fretboardNotes";
 
 /** A place that was pressed. */
-export interface PressedPlace {
+interface PressedPlace {
   /** index of the string, from the bass side */
   string: number;
   /** fret from the nut, 0 = open */

@@ -29,7 +29,7 @@ import { PlayerPlan } from "./PlayerPlan";
 import { withWay } from "./playersOf";
 
 /** A key to choose: where it lies from the song as written, and what is said of it. */
-export interface KeyChoice {
+interface KeyChoice {
   shift: number;
   label: string;
 }

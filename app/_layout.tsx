@@ -16,7 +16,7 @@ const parts: LazyPart[] = [
   () => import("./songs/[id]/keys"),
   () => Promise.all([import("./songs/[id]/compare"), import("./songs/[id]/together")]),
   () => import("./songs/[id]/try"),
-  () => import("./songs/[id]/ways"),
+  () => Promise.all([import("./songs/[id]/ways"), import("./songs/[id]/why"), import("./songs/[id]/everyone")]),
   () => import("./songs/[id]/arrangements/index"),
   () => import("./songs/[id]/arrangements/[arrangementId]"),
   () => import("@/features/ways/search/waySearch").then(({ openWaySearch }) => openWaySearch()),

@@ -9,7 +9,8 @@ import { ErrorState } from "@/features/ui/ErrorState";
 import { LinkButton } from "@/features/ui/LinkButton";
 import { Skeleton } from "@/features/ui/Skeleton";
 import type { Account } from "@/shared/contract/account";
-import { clearAddress, keptToken, tokenInAddress } from "./linkToken";
+import { keptToken, tokenInAddress } from "./linkToken";
+import { useAddressCleared } from "./useAddressCleared";
 
 type Outcome = { email: string } | ApiError | null;
 
@@ -26,7 +27,7 @@ export function ConfirmPage() {
   const [token] = useState(takeToken);
   const [outcome, setOutcome] = useState<Outcome>(null);
   const begun = useRef(false);
-  useEffect(clearAddress, []);
+  useAddressCleared();
 
   const confirm = useCallback(async () => {
     setOutcome(null);

@@ -1,4 +1,4 @@
-import { useEffect, useState } from "react";
+import { useState } from "react";
 import { ApiError } from "@/features/api/apiError";
 import { http } from "@/features/api/httpClient";
 import { session } from "@/features/api/session";
@@ -9,14 +9,15 @@ import { checkNewPassword } from "../forms/checkPassword";
 import { FormEnd } from "../forms/FormEnd";
 import { PasswordField } from "../forms/FormField";
 import { useAccountForm } from "../forms/useAccountForm";
-import { clearAddress, tokenInAddress } from "./linkToken";
+import { tokenInAddress } from "./linkToken";
+import { useAddressCleared } from "./useAddressCleared";
 import { NarrowCard } from "./NarrowCard";
 
 /** A new password, by the link from the mail. */
 export function ResetForm() {
   const [token] = useState(tokenInAddress);
   const [state, setState] = useState<"open" | "done" | "not-valid">(token === "" ? "not-valid" : "open");
-  useEffect(clearAddress, []);
+  useAddressCleared();
   const { form, refusal, problem, sending, submit } = useAccountForm({ password: "" }, async ({ password }) => {
     try {
       await http.open("/auth/reset", { token, password });

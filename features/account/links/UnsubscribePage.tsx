@@ -1,5 +1,5 @@
 import { useMutation } from "@tanstack/react-query";
-import { useEffect, useState } from "react";
+import { useState } from "react";
 import { ApiError } from "@/features/api/apiError";
 import { http } from "@/features/api/httpClient";
 import { Button } from "@/features/ui/Button";
@@ -9,13 +9,14 @@ import { Notice } from "@/features/ui/Notice";
 import { Text } from "@/features/ui/Text";
 import type { Unsubscribed } from "@/shared/contract/mail";
 import { mailWords } from "../mail/mailWords";
-import { clearAddress, tokenInAddress } from "./linkToken";
+import { tokenInAddress } from "./linkToken";
+import { useAddressCleared } from "./useAddressCleared";
 import { NarrowCard } from "./NarrowCard";
 
 /** Ends one kind of mail, without signing in. */
 export function UnsubscribePage() {
   const [token] = useState(tokenInAddress);
-  useEffect(clearAddress, []);
+  useAddressCleared();
   const end = useMutation({
     mutationFn: () => http.open<Unsubscribed>(`/mail/unsubscribe?token=${encodeURIComponent(token)}`),
   });

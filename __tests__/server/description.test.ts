@@ -98,6 +98,7 @@ it("makes its schemas from the contracts", async () => {
       "SecurityEvent",
       "ServiceHealth",
       "Suspension",
+      "Arrangement",
       "ChartPdfRequest",
       "Decision",
       "Health",

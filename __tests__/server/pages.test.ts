@@ -39,13 +39,22 @@ afterAll(async () => {
 const get = (address: string, encoding = "identity") =>
   request(server.app).get(address).set("Accept-Encoding", encoding);
 
-it.each([...clientRoutes])("shows the client's page at %s", async (route) => {
+const shared = clientRoutes.filter((route) => route.includes(":token"));
+
+it.each(clientRoutes.filter((route) => !shared.includes(route)))("shows the client's page at %s", async (route) => {
   const address = route.replace(":id", "6b273a3d-f63c-4f39-8493-f88da85a1e6a").replace(":arrangement", "root-2");
   const response = await get(address).expect(200).expect("Content-Type", /html/);
   expect(response.text).toBe(page);
   expect(response.headers["cache-control"]).toBe("no-cache");
   await get(`${address}?from=home`).expect(200);
   await request(server.app).head(address).expect(200);
+});
+
+it.each(shared)("says by the status of %s that a link leads nowhere, on the client's page", async (route) => {
+  const response = await get(route.replace(":token", "x".repeat(32)))
+    .expect(404)
+    .expect("Content-Type", /html/);
+  expect(response.text).toBe(page);
 });
 
 it.each([

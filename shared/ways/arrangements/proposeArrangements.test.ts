@@ -43,14 +43,22 @@ describe("laws of arrangements", () => {
     each((found, { instrument, capo }) => {
       for (const { chords } of found)
         for (const { played, shape } of chords) {
+          if (shape === null) {
+            // Some chords are not on some instruments: three strings of root and fifth have no third in reach.
+            expect(findShapes(parseChord(played)!, instrument, { capo, maxFret: 12 })).toEqual([]);
+            continue;
+          }
           const wanted = new Set(chordPitchClasses(parseChord(played)!).map((pc) => (pc + capo) % 12));
-          const heard = soundedStrings(shape!.frets, instrument, { retune: 0, capo }).map(({ midi }) =>
+          const heard = soundedStrings(shape.frets, instrument, { retune: 0, capo }).map(({ midi }) =>
             pitchClass(midi),
           );
           expect(heard.every((pc) => wanted.has(pc))).toBe(true);
-          expect(heard).toContain(
-            (chordPitchClasses({ ...parseChord(played)!, intervals: [0], bass: null })[0]! + capo) % 12,
+          // Three strings cannot hold all of F7: the root may be what is left out, where no shape at all has it.
+          const root = (chordPitchClasses({ ...parseChord(played)!, intervals: [0], bass: null })[0]! + capo) % 12;
+          const rooted = findShapes(parseChord(played)!, instrument, { capo, maxFret: 12 }).some((each) =>
+            soundedStrings(each.frets, instrument, { retune: 0, capo }).some(({ midi }) => pitchClass(midi) === root),
           );
+          if (rooted) expect(heard).toContain(root);
         }
     });
   });
@@ -84,7 +92,10 @@ describe("laws of arrangements", () => {
       const [high, plain] = [known(found, "highest"), known(found, "plainest")];
       if (!high || !plain || high === plain) return;
       const sum = (arrangement: ArrangementProposal) =>
-        arrangement.chords.reduce((all, { shape }) => all + Math.max(...shape!.frets.map((fret) => fret ?? 0)), 0);
+        arrangement.chords.reduce(
+          (all, { shape }) => all + Math.max(0, ...(shape?.frets ?? []).map((fret) => fret ?? 0)),
+          0,
+        );
       expect(sum(high)).toBeGreaterThanOrEqual(sum(plain));
     });
   });

@@ -98,8 +98,7 @@ export function proposeArrangements(question: ArrangementQuestion): ArrangementP
 
 /** The shapes of a chord that may be proposed, the plainest first. */
 function optionsOf(played: string, { instrument, capo }: ArrangementQuestion): Option[] {
-  const within = ({ frets }: Shape) => frets.every((fret) => (fret ?? 0) <= highestUsedFret);
-  const found = allShapes(played, instrument, capo).filter(within);
+  const found = allShapes(played, instrument, capo, highestUsedFret);
   const easiest = found[0] ? costOf(found[0]) : 0;
   return found.flatMap((shape): Option[] => {
     const cost = costOf(shape);

@@ -9,12 +9,14 @@ import type { Shape } from "../way";
  * @param played name of the shape that the fingers play, ASCII
  * @param instrument tuning, scale and frets
  * @param capo fret of the capo, 0 for none
+ * @param maxFret highest fret to stop, counted from nut or capo; the whole neck where it is left out
  * @returns shapes, easiest first; none for what is no chord and for what the instrument cannot play
  * @throws RangeError if a string's note cannot be read
  */
-export function allShapes(played: string, instrument: Instrument, capo: number): Shape[] {
+export function allShapes(played: string, instrument: Instrument, capo: number, maxFret?: number): Shape[] {
   const chord = parseChord(played);
   if (!chord) return [];
-  const found = findShapes(chord, instrument, { capo });
-  return found.length > 0 || chord.bass === null ? found : findShapes(chord, instrument, { capo, bass: false });
+  const within = { capo, ...(maxFret === undefined ? null : { maxFret }) };
+  const found = findShapes(chord, instrument, within);
+  return found.length > 0 || chord.bass === null ? found : findShapes(chord, instrument, { ...within, bass: false });
 }

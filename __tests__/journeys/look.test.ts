@@ -43,7 +43,7 @@ function screens(ferry: string): [path: string, ready: (page: Page) => Promise<u
     [`/songs/${ferry}/compare?keys=-7,-8,-6`, (page) => page.getByTestId("compare").waitFor()],
     [`/songs/${ferry}/try?key=C&shift=-7`, (page) => page.getByTestId("sing-start").waitFor()],
     [`/songs/${ferry}/ways`, (page) => page.getByTestId("ways").waitFor()],
-    ["/instruments", (page) => page.getByTestId("instrument-ukulele").waitFor()],
+    ["/instruments", (page) => page.getByText("Ukuleles").first().waitFor()],
     ["/account", (page) => page.getByTestId("account-email").waitFor()],
     ["/nowhere", heading],
   ];

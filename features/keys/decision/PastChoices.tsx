@@ -73,7 +73,7 @@ function Again({ of: { key, on, again }, onPress }: { of: ToldChoice; onPress: (
       kind="text"
       small
       label="Use again"
-      accessibleName={`Use ${sign} of ${on} again`}
+      accessibleName={`Use again: ${sign} of ${on}`}
       onPress={() => again && onPress(again)}
       testID="use-again"
     />

@@ -1,6 +1,6 @@
 import request from "supertest";
 import type { OpenSession } from "../../shared/contract/account";
-import { another, confirmedPerson, mailTo as newestMail, postAuth } from "./confirmedPerson";
+import { another, clearTraces, confirmedPerson, mailTo as newestMail, postAuth } from "./confirmedPerson";
 import { cookieOf, password, Person, startTestServer, type TestServer } from "./testServer";
 
 let server: TestServer;
@@ -8,11 +8,7 @@ beforeAll(async () => {
   server = await startTestServer();
 });
 afterAll(() => server.close());
-beforeEach(async () => {
-  await server.runJobs();
-  server.smtp.mails.length = 0;
-  await server.database.query("DELETE FROM tries");
-});
+beforeEach(() => clearTraces(server));
 
 const post = (path: string, body: object) => postAuth(server, path, body);
 const mailTo = (email: string) => newestMail(server, email);

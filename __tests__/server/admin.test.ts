@@ -1,4 +1,4 @@
-import { another, confirmedPerson, postAuth } from "./confirmedPerson";
+import { another, clearTraces, confirmedPerson, postAuth } from "./confirmedPerson";
 import { password, type Person, startTestServer, type TestServer } from "./testServer";
 
 let server: TestServer;
@@ -6,11 +6,7 @@ beforeAll(async () => {
   server = await startTestServer();
 });
 afterAll(() => server.close());
-beforeEach(async () => {
-  await server.runJobs();
-  server.smtp.mails.length = 0;
-  await server.database.query("DELETE FROM tries");
-});
+beforeEach(() => clearTraces(server));
 
 const post = (path: string, body: object) => postAuth(server, path, body);
 const confirmed = (email?: string) => confirmedPerson(server, email);

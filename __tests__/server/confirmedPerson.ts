@@ -7,6 +7,13 @@ export const another = "gulls over the breakwater";
 export const postAuth = (server: TestServer, path: string, body: object) =>
   request(server.app).post(`/api/auth/${path}`).send(body);
 
+/** Forgets what the test before left in the queue, in the inbox and in the buckets of tries. */
+export async function clearTraces(server: TestServer): Promise<void> {
+  await server.runJobs();
+  server.smtp.mails.length = 0;
+  await server.database.query("DELETE FROM tries");
+}
+
 /** The newest mail to an address, and the token in its link. */
 export async function mailTo(server: TestServer, email: string) {
   await server.runJobs();

@@ -1,6 +1,6 @@
 import { Secret, TOTP } from "otpauth";
 import request from "supertest";
-import { confirmedPerson, postAuth } from "./confirmedPerson";
+import { clearTraces, confirmedPerson, postAuth } from "./confirmedPerson";
 import { password, Person, startTestServer, type TestServer } from "./testServer";
 
 let server: TestServer;
@@ -8,11 +8,7 @@ beforeAll(async () => {
   server = await startTestServer();
 });
 afterAll(() => server.close());
-beforeEach(async () => {
-  await server.runJobs();
-  server.smtp.mails.length = 0;
-  await server.database.query("DELETE FROM tries");
-});
+beforeEach(() => clearTraces(server));
 
 const post = (path: string, body: object) => postAuth(server, path, body);
 const confirmed = (email?: string) => confirmedPerson(server, email);

@@ -1,5 +1,6 @@
 import type { Counts } from "@/features/api/belongings";
 import type { Collection } from "@/features/api/items";
+import { listWords } from "@/shared/music/listWords";
 
 const words: Record<Collection, readonly [one: string, many: string]> = {
   voices: ["voice", "voices"],
@@ -18,7 +19,5 @@ export function belongingsInWords(counts: Counts): string | null {
   const parts = (Object.keys(words) as Collection[])
     .filter((name) => counts[name] > 0)
     .map((name) => `${counts[name]} ${words[name][counts[name] === 1 ? 0 : 1]}`);
-  const last = parts.pop();
-  if (last === undefined) return null;
-  return parts.length === 0 ? last : `${parts.join(", ")} and ${last}`;
+  return parts.length === 0 ? null : listWords(parts);
 }

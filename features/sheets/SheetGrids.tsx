@@ -1,10 +1,10 @@
+import { pieceTones } from "@/features/ui/pieceTones";
 import { parseChord } from "@/shared/music/chord";
 import { glyphs } from "@/shared/music/pitch";
 import { gridHeight, gridPicture, gridWidth } from "@/shared/sheets/gridPicture";
 import type { Sheet, SheetOptions } from "@/shared/sheets/sheet";
 import { strokesHeight, strokesPicture } from "@/shared/sheets/strokesPicture";
 import { Piece } from "./paper/Piece";
-import { onScreen } from "./paper/pieceColors";
 
 export interface SheetGridsProps {
   sheet: Sheet;
@@ -28,14 +28,14 @@ export function SheetGrids({ sheet: { chords, instrument, strokes }, options }: 
           <svg key={chord.written} width={gridWidth} height={height} viewBox={`0 0 ${gridWidth} ${height}`}>
             <Piece
               piece={gridPicture(chord, words, instrument, options.leftHanded, { x: 0, y: 0 })}
-              colors={onScreen}
+              colors={pieceTones}
             />
           </svg>
         );
       })}
       {strokes && (
         <svg width={200} height={strokesHeight} viewBox={`0 0 200 ${strokesHeight}`}>
-          <Piece piece={strokesPicture(strokes, { x: 0, y: 0, width: 190 })} colors={onScreen} />
+          <Piece piece={strokesPicture(strokes, { x: 0, y: 0, width: 190 })} colors={pieceTones} />
         </svg>
       )}
     </div>

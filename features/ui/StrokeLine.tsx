@@ -1,19 +1,9 @@
 import Svg, { Circle, Line } from "react-native-svg";
 import type { SheetStrokes } from "@/shared/sheets/sheet";
-import type { SheetTone } from "@/shared/sheets/sheetPiece";
 import { strokesHeight, strokesPicture } from "@/shared/sheets/strokesPicture";
+import { pieceTones } from "./pieceTones";
 import { SvgLabel } from "./SvgLabel";
 import { colors } from "./theme";
-
-const tones: Record<SheetTone, string> = {
-  ink: colors.ink,
-  soft: colors.inkSoft,
-  line: colors.line,
-  plum: colors.plum,
-  lagoon: colors.lagoon,
-  paper: colors.paper,
-  onPlum: colors.onPlum,
-};
 
 /** What the right hand does in a bar, drawn as it stands on the sheet: arrows over the count. */
 export function StrokeLine({ strokes, width = 240 }: { strokes: SheetStrokes; width?: number }) {
@@ -23,12 +13,16 @@ export function StrokeLine({ strokes, width = 240 }: { strokes: SheetStrokes; wi
       {pieces.map((piece, index) => {
         if (piece.kind === "line") {
           const { x1, y1, x2, y2, width: strokeWidth, tone } = piece;
-          return <Line key={index} {...{ x1, y1, x2, y2, strokeWidth }} stroke={tones[tone]} strokeLinecap="round" />;
+          return (
+            <Line key={index} {...{ x1, y1, x2, y2, strokeWidth }} stroke={pieceTones[tone]} strokeLinecap="round" />
+          );
         }
         if (piece.kind === "dot") {
           const { x, y, radius, stroke, tone } = piece;
           const look =
-            stroke === null ? { fill: tones[tone] } : { fill: "none", stroke: tones[tone], strokeWidth: stroke };
+            stroke === null
+              ? { fill: pieceTones[tone] }
+              : { fill: "none", stroke: pieceTones[tone], strokeWidth: stroke };
           return <Circle key={index} cx={x} cy={y} r={radius} {...look} />;
         }
         const run = piece.kind === "text" ? piece.runs[0] : undefined;

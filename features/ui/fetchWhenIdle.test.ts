@@ -5,10 +5,12 @@ afterEach(() => jest.useRealTimers());
 
 function parts() {
   const asked: string[] = [];
-  const part = (name: string, fails = false) => async () => {
-    asked.push(name);
-    if (fails) throw new Error("no connection");
-  };
+  const part =
+    (name: string, fails = false) =>
+    async () => {
+      asked.push(name);
+      if (fails) throw new Error("no connection");
+    };
   return { asked, list: [part("keys"), part("ways", true), part("edit")] };
 }
 

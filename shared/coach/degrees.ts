@@ -53,15 +53,3 @@ export function numberGlyphs(number: string): string {
     (_, before: string, sign: string) => before + signed(sign),
   );
 }
-
-/**
- * Several things in a sentence.
- *
- * @param items at least one
- * @returns such as "D, G and A"
- * @example listed(["D", "G", "A"]) // => "D, G and A"
- */
-export function listed(items: readonly string[]): string {
-  const last = items.at(-1) ?? "";
-  return items.length < 2 ? last : `${items.slice(0, -1).join(", ")} and ${last}`;
-}

@@ -1,4 +1,3 @@
-import { fretSemitones } from "../instruments/frets";
 import type { Instrument } from "../instruments/instrument";
 import { stringMidi } from "../instruments/tension";
 import { type KeyName, spellInKey } from "../music/keyName";
@@ -24,24 +23,6 @@ export function retuned(instrument: Instrument, semitones: number, key: KeyName)
     return { ...string, note: /^(B#|Cb)$/.test(letter) ? plain : letter + octave };
   });
   return { ...instrument, strings };
-}
-
-/**
- * What sounds at a place of the neck.
- *
- * @param instrument in its tuning
- * @param string index from the bass side
- * @param fret from the nut, 0 = open
- * @returns MIDI note number; null where a short string or the neck has no such fret
- * @throws RangeError if the string's note cannot be read
- */
-export function soundAt(instrument: Instrument, string: number, fret: number): number | null {
-  const of = instrument.strings[string];
-  const semitones = fretSemitones(instrument, fret);
-  if (!of || semitones === null) return null;
-  const start = of.startsAtFret ?? 0;
-  if (fret > 0 && fret <= start) return null;
-  return stringMidi(of) + (fret === 0 ? 0 : semitones - (fretSemitones(instrument, start) ?? 0));
 }
 
 /**

@@ -1,6 +1,7 @@
 import { glyphs } from "../music/pitch";
 import type { Instrument } from "./instrument";
 import { isWound, tensionChanges, totalTension, type TensionChange, type TensionTotal } from "./tension";
+import { listWords } from "../music/listWords";
 
 /** One turn at a peg. */
 interface RetuneStep {
@@ -80,8 +81,7 @@ function reasonsFor(down: number, up: number): string[] {
 
 function cautionsFor(instrument: Instrument, changes: readonly TensionChange[], total: TensionTotal): string[] {
   const named = (wanted: (change: TensionChange, k: number) => boolean) => {
-    const names = changes.flatMap((change, k) => (wanted(change, k) ? [glyphs(change.string)] : []));
-    return names.length < 2 ? names.join("") : `${names.slice(0, -1).join(", ")} and ${names.at(-1)}`;
+    return listWords(changes.flatMap((change, k) => (wanted(change, k) ? [glyphs(change.string)] : [])));
   };
   const plain = named(({ verdict, load }) => verdict === "unsafe" && load !== null);
   const others = named(({ verdict, load }) => verdict === "unsafe" && load === null);

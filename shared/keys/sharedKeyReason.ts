@@ -1,6 +1,7 @@
 import { glyphs, noteName, type Spelling } from "../music/pitch";
 import { COARSE_WORDS } from "./keyReason";
 import type { SharedSinger } from "./sharedSinger";
+import { listWords } from "../music/listWords";
 
 /**
  * Who has a key hardest, and by how much.
@@ -59,6 +60,5 @@ function has(same: boolean, low: readonly SharedSinger[]): string {
 
 function namesOf(singers: readonly SharedSinger[]): string {
   const names = [...new Set(singers.map(({ name }) => name))];
-  if (names.length > 3) return `${names.length} singers`;
-  return names.length === 1 ? names[0]! : `${names.slice(0, -1).join(", ")} and ${names[names.length - 1]}`;
+  return names.length > 3 ? `${names.length} singers` : listWords(names);
 }

@@ -1,6 +1,7 @@
 import { type Chord, chordThird } from "../music/chord";
 import { type KeyName, type Mode, scaleSteps, tonicPitchClass } from "../music/keyName";
 import { bellmanBudge, correlateProfiles, temperleyKostkaPayne } from "./keyProfiles";
+import { listWords } from "../music/listWords";
 
 /** How far evidence speaks for a key, and the words for it. */
 export interface Evidence {
@@ -142,9 +143,6 @@ function chordReasons(steps: readonly Step[], tonic: number, mode: Mode, key: Ke
   const strangers = [...new Set(steps.filter((step) => fit(step, tonic, kind) < 0.7).map((step) => step.chord.text))];
   if (strangers.length === 0) reasons.push(`All its chords belong to ${key.tonic} ${kind}.`);
   else if (strangers.length === 1) reasons.push(`Outside ${key.tonic} ${kind} there is only ${strangers[0]}.`);
-  else if (strangers.length <= 3)
-    reasons.push(
-      `Outside ${key.tonic} ${kind} there are only ${strangers.slice(0, -1).join(", ")} and ${strangers.at(-1)}.`,
-    );
+  else if (strangers.length <= 3) reasons.push(`Outside ${key.tonic} ${kind} there are only ${listWords(strangers)}.`);
   return reasons;
 }

@@ -5,6 +5,7 @@ import { parseChord, type Chord } from "../music/chord";
 import { tonicPitchClass } from "../music/keyName";
 import { glyphs } from "../music/pitch";
 import type { Shape } from "./way";
+import { listWords } from "../music/listWords";
 
 const toneNames: Record<number, string> = {
   0: "root",
@@ -63,10 +64,7 @@ export function leftOutWords(played: string, shape: Shape, instrument: Instrumen
   const missing = weighty(chord).filter((interval) => !heard.has(interval % 12));
   if (missing.length === 0) return null;
   const names = missing.map((interval) => toneNames[interval] ?? "tone");
-  const what =
-    names.length === 1
-      ? `the ${names[0]} does`
-      : `the ${names.slice(0, -1).join(", ")} and ${names[names.length - 1]} do`;
+  const what = `the ${listWords(names)} ${names.length === 1 ? "does" : "do"}`;
   const strings = instrument.strings.filter(({ startsAtFret }) => startsAtFret === undefined).length;
   const rest = plainName(chord, heard);
   return `${glyphs(played)}${rest === null ? "" : ` as ${glyphs(rest)}`}: ${what} not fit on ${counts[strings] ?? strings} strings.`;

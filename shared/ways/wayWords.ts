@@ -7,6 +7,7 @@ import { insteadOf } from "./insteadOf";
 import { leftOutWords } from "./leftOutTones";
 import { missingShapes, missingWords } from "./missingShapes";
 import type { Shape, StringChange, Way, WayChord } from "./way";
+import { listWords } from "../music/listWords";
 
 /** What the words about a way are made from. */
 export interface WayFacts {
@@ -95,7 +96,7 @@ export function wayWhy({ kind, difficulty, chords, asWritten, instrument }: WayF
   const barres = chords.filter(({ shape }) => shape?.barre).map(({ played }) => glyphs(played));
   const within = highest === 0 ? "open strings alone" : withinFrets(highest, instrument);
   const barreWords =
-    barres.length === 0 ? "no barre" : `${barres.length === 1 ? "a barre" : "barres"} for ${list(barres)}`;
+    barres.length === 0 ? "no barre" : `${barres.length === 1 ? "a barre" : "barres"} for ${distinct(barres)}`;
   const effect: Record<Way["kind"], string> = {
     "as-is": "Nothing to clamp or retune.",
     capo: "Nothing retuned.",
@@ -122,7 +123,7 @@ export function wayCautions({ retune, capo, chords, withoutBass, strings, instru
   const cautions: string[] = [];
   const { names } = missingShapes(chords);
   if (names.length > 0) {
-    cautions.push(`This instrument has no playable shape for ${list(names.map(glyphs))}.`);
+    cautions.push(`This instrument has no playable shape for ${distinct(names.map(glyphs))}.`);
     for (const name of new Set(names)) cautions.push(`For ${glyphs(name)}, ${insteadOf(name, instrument, capo)}.`);
   }
   const fresh = chords
@@ -132,7 +133,7 @@ export function wayCautions({ retune, capo, chords, withoutBass, strings, instru
     cautions.push(
       fresh.length === 1
         ? `${fresh[0]} is the new shape: three minutes with it first.`
-        : `${list(fresh)} are the new shapes: a few minutes with them first.`,
+        : `${distinct(fresh)} are the new shapes: a few minutes with them first.`,
     );
   const partial = chords.map(({ played, shape }) => (shape ? leftOutWords(played, shape, instrument) : null));
   cautions.push(...new Set(partial.filter((words) => words !== null)));
@@ -148,10 +149,10 @@ export function wayCautions({ retune, capo, chords, withoutBass, strings, instru
     const silent = chords
       .filter(({ shape }) => shape && shape.frets[short] === null)
       .map(({ played }) => glyphs(played));
-    if (silent.length > 0) cautions.push(`Leave the short ${name} string silent on ${list(silent)}.`);
+    if (silent.length > 0) cautions.push(`Leave the short ${name} string silent on ${distinct(silent)}.`);
   }
   if (withoutBass.length > 0)
-    cautions.push(`The bass behind the slash cannot lie lowest here: ${list(withoutBass.map(glyphs))}.`);
+    cautions.push(`The bass behind the slash cannot lie lowest here: ${distinct(withoutBass.map(glyphs))}.`);
   if (capo > 0) cautions.push("Check the tuning after clamping.");
   if (capo > 5) cautions.push("So high up the sound is thin and the frets are narrow.");
   return cautions;
@@ -221,11 +222,10 @@ function plural(count: number, noun: string): string {
   return count === 1 ? `1 ${noun}` : `${count} ${noun}s`;
 }
 
-function list(names: readonly string[]): string {
-  const unique = [...new Set(names)];
-  return unique.length <= 1 ? unique.join("") : `${unique.slice(0, -1).join(", ")} and ${unique[unique.length - 1]}`;
-}
-
 function kg(lb: number): string {
   return (lb * kgPerLb).toFixed(1);
+}
+
+function distinct(names: readonly string[]): string {
+  return listWords([...new Set(names)]);
 }

@@ -22,7 +22,7 @@ function FactsForm({ facts }: { facts: PersonFacts }) {
   const client = useQueryClient();
   const [kept, setKept] = useState(false);
   const start = { birthYear: facts.birthYear === null ? "" : String(facts.birthYear), country: facts.country ?? "" };
-  const { form, refusal, problem, sending, submit } = useAccountForm(start, async ({ birthYear, country }) => {
+  const { form, end, submit } = useAccountForm(start, async ({ birthYear, country }) => {
     setKept(false);
     const told: PersonFacts = {
       birthYear: birthYear.trim() === "" ? null : Number(birthYear),
@@ -50,15 +50,7 @@ function FactsForm({ facts }: { facts: PersonFacts }) {
         testID="country"
       />
       {kept && <Notice kind="good">Kept.</Notice>}
-      <FormEnd
-        small
-        refusal={refusal}
-        problem={problem}
-        sending={sending}
-        sendLabel="Keep this"
-        busyLabel="Keeping it"
-        testID="keep-person"
-      />
+      <FormEnd small {...end} sendLabel="Keep this" busyLabel="Keeping it" testID="keep-person" />
     </Form>
   );
 }

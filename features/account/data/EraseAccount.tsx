@@ -7,16 +7,15 @@ import { Heading } from "@/features/ui/Heading";
 import { Text } from "@/features/ui/Text";
 import { Button } from "@/features/ui/Button";
 import type { Erasure } from "@/shared/contract/account";
-import { checkKnownPassword } from "../forms/checkPassword";
 import { FormEnd } from "../forms/FormEnd";
-import { PasswordField } from "../forms/FormField";
+import { KnownPasswordField } from "../forms/FormField";
 import { useAccountForm } from "../forms/useAccountForm";
 import { View } from "react-native";
 
 /** Says what happens, and asks the password before it does. */
 export function EraseAccount({ onErased }: { onErased: (eraseAt: string) => void }) {
   const [asked, setAsked] = useState(false);
-  const { form, refusal, problem, sending, submit } = useAccountForm({ password: "" }, async (typed) => {
+  const { form, end, submit } = useAccountForm({ password: "" }, async (typed) => {
     const { eraseAt } = await http.post<Erasure>("/account/erasure", typed);
     onErased(eraseAt);
     session.leave();
@@ -30,23 +29,8 @@ export function EraseAccount({ onErased }: { onErased: (eraseAt: string) => void
       </Text>
       {asked ? (
         <Form label="Erase the account" onSubmit={submit}>
-          <PasswordField
-            form={form}
-            name="password"
-            label="Password"
-            check={checkKnownPassword}
-            autoComplete="current-password"
-            testID="erase-password"
-          />
-          <FormEnd
-            small
-            refusal={refusal}
-            problem={problem}
-            sending={sending}
-            sendLabel="Erase my account"
-            busyLabel="One moment"
-            testID="erase"
-          />
+          <KnownPasswordField form={form} name="password" testID="erase-password" />
+          <FormEnd small {...end} sendLabel="Erase my account" busyLabel="One moment" testID="erase" />
           <View style={{ alignSelf: "flex-start", marginLeft: -8 }}>
             <Button kind="text" small label="Keep it" onPress={() => setAsked(false)} />
           </View>

@@ -28,7 +28,7 @@ interface CredentialsFormProps {
 /** E-mail address and password. Whatever goes wrong, what was typed stays. */
 export function CredentialsForm(props: CredentialsFormProps) {
   const { entering, progress } = props;
-  const { form, refusal, problem, submit } = useAccountForm<SignInRequest>(
+  const { form, end, submit } = useAccountForm<SignInRequest>(
     { email: props.email, password: "" },
     ({ email, password }) => props.enter({ email: email.trim(), password }),
   );
@@ -54,8 +54,7 @@ export function CredentialsForm(props: CredentialsFormProps) {
       />
       {props.children}
       <FormEnd
-        refusal={refusal}
-        problem={problem}
+        {...end}
         sending={entering}
         sendLabel={props.sendLabel}
         busyLabel={movingWords(entering, progress) ?? props.busyLabel}

@@ -14,7 +14,7 @@ import type { useEntry } from "./useEntry";
 
 /** After the password: the code of the app, or a recovery code. */
 export function SecondStepForm({ entry }: { entry: ReturnType<typeof useEntry> }) {
-  const { form, refusal, problem, submit } = useAccountForm({ code: "" }, ({ code }) => entry.secondStep(code.trim()));
+  const { form, end, submit } = useAccountForm({ code: "" }, ({ code }) => entry.secondStep(code.trim()));
   const field = useRef<HTMLDivElement>(null);
   useEffect(() => field.current?.querySelector("input")?.focus(), []);
   return (
@@ -37,8 +37,7 @@ export function SecondStepForm({ entry }: { entry: ReturnType<typeof useEntry> }
         </div>
         <MovesIn />
         <FormEnd
-          refusal={refusal}
-          problem={problem}
+          {...end}
           sending={entry.entering}
           sendLabel="Sign in"
           busyLabel={movingWords(entry.entering, entry.progress) ?? "Signing in"}

@@ -1,14 +1,10 @@
-import type { RefObject } from "react";
 import { View } from "react-native";
-import type { ApiError } from "@/features/api/apiError";
 import { Button } from "@/features/ui/Button";
 import { LiveText } from "@/features/ui/LiveText";
 import { Notice } from "@/features/ui/Notice";
+import type { FormProgress } from "./useAccountForm";
 
-export interface FormEndProps {
-  refusal: ApiError | null;
-  problem: RefObject<HTMLDivElement | null>;
-  sending: boolean;
+interface FormEndProps extends FormProgress {
   sendLabel: string;
   busyLabel: string;
   /** a button among other cards, instead of the one of the page */

@@ -3,6 +3,7 @@ import { Controller, type FieldValues, type Path, type UseFormReturn } from "rea
 import { View } from "react-native";
 import { Button } from "@/features/ui/Button";
 import { Field, type FieldProps } from "@/features/ui/Field";
+import { checkKnownPassword } from "./checkPassword";
 
 export interface FormFieldProps<Values extends FieldValues> extends Pick<
   FieldProps,
@@ -54,4 +55,12 @@ export function PasswordField<Values extends FieldValues>(props: Omit<FormFieldP
       </View>
     </View>
   );
+}
+
+/** The password that the account has, asked once more before something that matters. */
+export function KnownPasswordField<Values extends FieldValues>({
+  label = "Password",
+  ...field
+}: Pick<FormFieldProps<Values>, "form" | "name" | "testID"> & { label?: string }) {
+  return <PasswordField {...field} label={label} check={checkKnownPassword} autoComplete="current-password" />;
 }

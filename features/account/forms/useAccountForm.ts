@@ -2,13 +2,19 @@ import { useEffect, useRef, useState, type RefObject } from "react";
 import { useForm, type DefaultValues, type FieldValues, type Path, type UseFormReturn } from "react-hook-form";
 import { ApiError } from "@/features/api/apiError";
 
-export interface AccountForm<Values extends FieldValues> {
-  form: UseFormReturn<Values>;
+/** How far the sending of a form has come. */
+export interface FormProgress {
   /** what was refused and belongs to no field */
   refusal: ApiError | null;
   sending: boolean;
   /** where the refusal stands, so that it can take the focus */
   problem: RefObject<HTMLDivElement | null>;
+}
+
+interface AccountForm<Values extends FieldValues> {
+  form: UseFormReturn<Values>;
+  /** what the foot of the form shows */
+  end: FormProgress;
   /** for the form's onSubmit: checks the fields, sends, and puts each complaint at its place */
   submit: () => void;
 }
@@ -48,5 +54,5 @@ export function useAccountForm<Values extends FieldValues>(
     }
   }
 
-  return { form, refusal, sending, problem, submit: () => void (sending || form.handleSubmit(attempt)()) };
+  return { form, end: { refusal, sending, problem }, submit: () => void (sending || form.handleSubmit(attempt)()) };
 }

@@ -14,7 +14,7 @@ import { NarrowCard } from "./NarrowCard";
 /** Asks for a link to choose a new password. Says the same whether or not the address is known. */
 export function ForgottenForm() {
   const [sentTo, setSentTo] = useState<string | null>(null);
-  const { form, refusal, problem, sending, submit } = useAccountForm({ email: "" }, async ({ email }) => {
+  const { form, end, submit } = useAccountForm({ email: "" }, async ({ email }) => {
     setSentTo(null);
     await http.open("/auth/forgotten", { email: email.trim() });
     setSentTo(email.trim());
@@ -38,13 +38,7 @@ export function ForgottenForm() {
             </Text>
           </Notice>
         )}
-        <FormEnd
-          refusal={refusal}
-          problem={problem}
-          sending={sending}
-          sendLabel={sentTo === null ? "Send the link" : "Send it once more"}
-          busyLabel="Sending"
-        />
+        <FormEnd {...end} sendLabel={sentTo === null ? "Send the link" : "Send it once more"} busyLabel="Sending" />
       </Form>
       <View style={{ alignSelf: "flex-start", marginLeft: -8 }}>
         <LinkButton kind="text" small label="Back to sign in" href="/account/sign-in" />

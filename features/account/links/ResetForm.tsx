@@ -18,7 +18,7 @@ export function ResetForm() {
   const [token] = useState(tokenInAddress);
   const [state, setState] = useState<"open" | "done" | "not-valid">(token === "" ? "not-valid" : "open");
   useAddressCleared();
-  const { form, refusal, problem, sending, submit } = useAccountForm({ password: "" }, async ({ password }) => {
+  const { form, end, submit } = useAccountForm({ password: "" }, async ({ password }) => {
     try {
       await http.open("/auth/reset", { token, password });
     } catch (error) {
@@ -60,13 +60,7 @@ export function ResetForm() {
           autoComplete="new-password"
           testID="password"
         />
-        <FormEnd
-          refusal={refusal}
-          problem={problem}
-          sending={sending}
-          sendLabel="Keep this password"
-          busyLabel="Changing your password"
-        />
+        <FormEnd {...end} sendLabel="Keep this password" busyLabel="Changing your password" />
       </Form>
     </NarrowCard>
   );

@@ -6,15 +6,15 @@ import { Heading } from "@/features/ui/Heading";
 import { Notice } from "@/features/ui/Notice";
 import { Text } from "@/features/ui/Text";
 import type { Account } from "@/shared/contract/account";
-import { checkAddress, checkKnownPassword } from "../forms/checkPassword";
+import { checkAddress } from "../forms/checkPassword";
 import { FormEnd } from "../forms/FormEnd";
-import { FormField, PasswordField } from "../forms/FormField";
+import { FormField, KnownPasswordField } from "../forms/FormField";
 import { useAccountForm } from "../forms/useAccountForm";
 
 /** Another address for the account; the present one stays until the new one is confirmed. */
 export function ChangeEmail({ account }: { account: Account }) {
   const [sentTo, setSentTo] = useState<string | null>(null);
-  const { form, refusal, problem, sending, submit } = useAccountForm({ email: "", password: "" }, async (typed) => {
+  const { form, end, submit } = useAccountForm({ email: "", password: "" }, async (typed) => {
     setSentTo(null);
     const email = typed.email.trim();
     await http.post("/account/email", { email, password: typed.password });
@@ -37,28 +37,13 @@ export function ChangeEmail({ account }: { account: Account }) {
           inputMode="email"
           testID="new-email"
         />
-        <PasswordField
-          form={form}
-          name="password"
-          label="Password"
-          check={checkKnownPassword}
-          autoComplete="current-password"
-          testID="email-password"
-        />
+        <KnownPasswordField form={form} name="password" testID="email-password" />
         {sentTo !== null && (
           <Notice kind="good" testID="email-asked">
             {`A link is on its way to ${sentTo}. Until you open it, your address stays as it is.`}
           </Notice>
         )}
-        <FormEnd
-          small
-          refusal={refusal}
-          problem={problem}
-          sending={sending}
-          sendLabel="Change the address"
-          busyLabel="Sending the link"
-          testID="change-email"
-        />
+        <FormEnd small {...end} sendLabel="Change the address" busyLabel="Sending the link" testID="change-email" />
       </Form>
     </Card>
   );

@@ -5,9 +5,9 @@ import { Card } from "@/features/ui/Card";
 import { Form } from "@/features/ui/Form";
 import { Heading } from "@/features/ui/Heading";
 import { Notice } from "@/features/ui/Notice";
-import { checkKnownPassword, checkNewPassword } from "../forms/checkPassword";
+import { checkNewPassword } from "../forms/checkPassword";
 import { FormEnd } from "../forms/FormEnd";
-import { PasswordField } from "../forms/FormField";
+import { KnownPasswordField, PasswordField } from "../forms/FormField";
 import { useAccountForm } from "../forms/useAccountForm";
 import { ApiError } from "@/features/api/apiError";
 import { accountQueries } from "../accountQueries";
@@ -22,7 +22,7 @@ function placed(error: unknown): unknown {
 export function ChangePassword() {
   const client = useQueryClient();
   const [done, setDone] = useState(false);
-  const { form, refusal, problem, sending, submit } = useAccountForm({ present: "", next: "" }, async (typed) => {
+  const { form, end, submit } = useAccountForm({ present: "", next: "" }, async (typed) => {
     setDone(false);
     await http.post("/account/password", typed).catch((error: unknown) => {
       throw placed(error);
@@ -35,14 +35,7 @@ export function ChangePassword() {
     <Card style={{ gap: 16 }}>
       <Heading level={2}>Password</Heading>
       <Form label="Change the password" onSubmit={submit}>
-        <PasswordField
-          form={form}
-          name="present"
-          label="Present password"
-          check={checkKnownPassword}
-          autoComplete="current-password"
-          testID="present-password"
-        />
+        <KnownPasswordField form={form} name="present" label="Present password" testID="present-password" />
         <PasswordField
           form={form}
           name="next"
@@ -57,15 +50,7 @@ export function ChangePassword() {
             Your password is changed. You stay signed in here; all other sessions have ended.
           </Notice>
         )}
-        <FormEnd
-          small
-          refusal={refusal}
-          problem={problem}
-          sending={sending}
-          sendLabel="Change the password"
-          busyLabel="Changing it"
-          testID="change-password"
-        />
+        <FormEnd small {...end} sendLabel="Change the password" busyLabel="Changing it" testID="change-password" />
       </Form>
     </Card>
   );

@@ -2,9 +2,9 @@ import { http } from "@/features/api/httpClient";
 import { Form } from "@/features/ui/Form";
 import { Text } from "@/features/ui/Text";
 import type { RecoveryCodes } from "@/shared/contract/account";
-import { checkCode, checkKnownPassword } from "../forms/checkPassword";
+import { checkCode } from "../forms/checkPassword";
 import { FormEnd } from "../forms/FormEnd";
-import { FormField, PasswordField } from "../forms/FormField";
+import { FormField, KnownPasswordField } from "../forms/FormField";
 import { useAccountForm } from "../forms/useAccountForm";
 import { NotNow } from "./EnrolForms";
 
@@ -18,20 +18,13 @@ interface BothProps {
 
 /** Password and code together, before something that weakens or renews the second step. */
 function PasswordAndCode({ label, text, busyLabel, send, onBack }: BothProps) {
-  const { form, refusal, problem, sending, submit } = useAccountForm({ password: "", code: "" }, (typed) =>
+  const { form, end, submit } = useAccountForm({ password: "", code: "" }, (typed) =>
     send({ password: typed.password, code: typed.code.trim() }),
   );
   return (
     <Form label={label} onSubmit={submit}>
       <Text variant="body">{text}</Text>
-      <PasswordField
-        form={form}
-        name="password"
-        label="Password"
-        check={checkKnownPassword}
-        autoComplete="current-password"
-        testID="codes-password"
-      />
+      <KnownPasswordField form={form} name="password" testID="codes-password" />
       <FormField
         form={form}
         name="code"
@@ -41,15 +34,7 @@ function PasswordAndCode({ label, text, busyLabel, send, onBack }: BothProps) {
         autoComplete="one-time-code"
         testID="codes-code"
       />
-      <FormEnd
-        small
-        refusal={refusal}
-        problem={problem}
-        sending={sending}
-        sendLabel={label}
-        busyLabel={busyLabel}
-        testID="codes-send"
-      />
+      <FormEnd small {...end} sendLabel={label} busyLabel={busyLabel} testID="codes-send" />
       <NotNow onBack={onBack} />
     </Form>
   );

@@ -4,9 +4,9 @@ import { Button } from "@/features/ui/Button";
 import { Form } from "@/features/ui/Form";
 import { Text } from "@/features/ui/Text";
 import type { RecoveryCodes, SecondFactorSetup } from "@/shared/contract/account";
-import { checkCode, checkKnownPassword } from "../forms/checkPassword";
+import { checkCode } from "../forms/checkPassword";
 import { FormEnd } from "../forms/FormEnd";
-import { FormField, PasswordField } from "../forms/FormField";
+import { FormField, KnownPasswordField } from "../forms/FormField";
 import { useAccountForm } from "../forms/useAccountForm";
 
 export function NotNow({ onBack }: { onBack: () => void }) {
@@ -19,28 +19,13 @@ export function NotNow({ onBack }: { onBack: () => void }) {
 
 /** First the password, so that nobody at an unlocked device switches codes on. */
 export function BeginForm({ onBegun, onBack }: { onBegun: (setup: SecondFactorSetup) => void; onBack: () => void }) {
-  const { form, refusal, problem, sending, submit } = useAccountForm({ password: "" }, async (typed) =>
+  const { form, end, submit } = useAccountForm({ password: "" }, async (typed) =>
     onBegun(await http.post<SecondFactorSetup>("/account/second-factor", typed)),
   );
   return (
     <Form label="Switch codes on" onSubmit={submit}>
-      <PasswordField
-        form={form}
-        name="password"
-        label="Password"
-        check={checkKnownPassword}
-        autoComplete="current-password"
-        testID="codes-password"
-      />
-      <FormEnd
-        small
-        refusal={refusal}
-        problem={problem}
-        sending={sending}
-        sendLabel="Go on"
-        busyLabel="One moment"
-        testID="codes-begin"
-      />
+      <KnownPasswordField form={form} name="password" testID="codes-password" />
+      <FormEnd small {...end} sendLabel="Go on" busyLabel="One moment" testID="codes-begin" />
       <NotNow onBack={onBack} />
     </Form>
   );
@@ -52,7 +37,7 @@ export function ConfirmForm(props: {
   onOn: (codes: readonly string[]) => void;
   onBack: () => void;
 }) {
-  const { form, refusal, problem, sending, submit } = useAccountForm({ code: "" }, async ({ code }) => {
+  const { form, end, submit } = useAccountForm({ code: "" }, async ({ code }) => {
     const answer = await http.post<RecoveryCodes>("/account/second-factor/confirm", { code: code.trim() });
     props.onOn(answer.recoveryCodes);
   });
@@ -86,15 +71,7 @@ export function ConfirmForm(props: {
           inputMode="numeric"
           testID="first-code"
         />
-        <FormEnd
-          small
-          refusal={refusal}
-          problem={problem}
-          sending={sending}
-          sendLabel="Switch codes on"
-          busyLabel="Switching on"
-          testID="codes-confirm"
-        />
+        <FormEnd small {...end} sendLabel="Switch codes on" busyLabel="Switching on" testID="codes-confirm" />
         <NotNow onBack={props.onBack} />
       </Form>
     </View>

@@ -6,7 +6,8 @@ import type { SingingVoice } from "@/shared/keys/keyScore";
 import type { SharedKey } from "@/shared/keys/sharedKey";
 import type { SharedSinger } from "@/shared/keys/sharedSinger";
 import type { Fit, GroupKey, GroupPart } from "./groupKey";
-import { leadShift, listWords, octaveOff, semitoneWords } from "./groupWords";
+import { listWords } from "@/shared/music/listWords";
+import { leadShift, octaveOff, semitoneWords } from "./groupWords";
 
 /** A singer that can be judged. */
 export interface JudgedSinger {

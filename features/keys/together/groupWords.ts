@@ -1,14 +1,10 @@
 import type { Song } from "@/shared/contract/song";
 import { keyFifths } from "@/shared/music/keyName";
 import { keySign } from "@/shared/music/keyWords";
+import { listWords } from "@/shared/music/listWords";
 import { glyphs, noteName } from "@/shared/music/pitch";
 import { writtenKeyOf } from "../songKeys";
 import type { GroupKey, GroupPart } from "./groupKey";
-
-/** "Maren, Ben and Nils" */
-export function listWords(names: readonly string[]): string {
-  return new Intl.ListFormat("en-GB").format(names);
-}
 
 export function semitoneWords(count: number): string {
   return `${count} ${count === 1 ? "semitone" : "semitones"}`;

@@ -1,7 +1,7 @@
 import { memo, type CSSProperties } from "react";
 import type { SheetPage } from "@/shared/sheets/sheetPages";
 import { Piece } from "./Piece";
-import { onPaper } from "./pieceColors";
+import { onPaper } from "./onPaper";
 
 export interface PaperPageProps {
   page: SheetPage;

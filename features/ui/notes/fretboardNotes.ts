@@ -1,6 +1,7 @@
-import { fretName, fretSemitones } from "@/shared/instruments/frets";
+import { fretName } from "@/shared/instruments/frets";
 import type { Instrument } from "@/shared/instruments/instrument";
-import { glyphs, parseNoteName } from "@/shared/music/pitch";
+import { soundAt } from "@/shared/instruments/soundAt";
+import { glyphs } from "@/shared/music/pitch";
 
 /** A place on the neck. */
 export interface NeckPlace {
@@ -18,15 +19,12 @@ export function neckPlaces(
   first: number,
   count: number,
 ): (NeckPlace | null)[][] {
-  return instrument.strings.map(({ note, startsAtFret = 0 }) => {
-    const open = parseNoteName(note);
+  return instrument.strings.map((_, string) => {
     const at = (fret: number): NeckPlace | null => {
-      const semitones = fretSemitones(instrument, fret);
-      const nut = fretSemitones(instrument, startsAtFret) ?? 0;
-      if (open === null || semitones === null || (fret > 0 && fret <= startsAtFret)) return null;
-      return { midi: open + (fret === 0 ? 0 : semitones - nut), fret: fretName(instrument, fret) };
+      const midi = soundAt(instrument, string, fret);
+      return midi === null ? null : { midi, fret: fretName(instrument, fret) };
     };
-    return [at(0), ...Array.from({ length: count }, (_, k) => at(first + k))];
+    return [at(0), ...Array.from({ length: count }, (_none, k) => at(first + k))];
   });
 }
 

@@ -16,6 +16,7 @@ import { inTune } from "../takeOfHeard";
 import { timeOnNotes } from "../timeOnNotes";
 import { VoiceLadder } from "../VoiceLadder";
 import { reachesFarther } from "../profile/VoicePicture";
+import { listWords } from "@/shared/music/listWords";
 
 export interface TakeResultProps {
   take: HeardTake;
@@ -127,8 +128,4 @@ function Why({ take, certainty, reasons }: { take: HeardTake; certainty: number;
       ))}
     </View>
   );
-}
-
-function listWords(words: readonly string[]): string {
-  return words.length < 2 ? words.join("") : `${words.slice(0, -1).join(", ")} and ${words.at(-1)}`;
 }

@@ -5,11 +5,12 @@ import { type KeyName, spellInKey } from "../../music/keyName";
 import { glyphs, pitchClass } from "../../music/pitch";
 import type { Way } from "../../ways/way";
 import type { Verdict } from "../coachQuestion";
-import { listed } from "../degrees";
 import { semitonesUp } from "../numberedChords";
 import { picked, type Chance } from "../seeded";
-import { retuned, soundAt, stringLetters } from "../tunedNeck";
+import { soundAt } from "../../instruments/soundAt";
+import { retuned, stringLetters } from "../tunedNeck";
 import type { LeftOut, NeckDot, WhyStep } from "../whyStep";
+import { listWords } from "../../music/listWords";
 
 /** What a capo step speaks of. */
 interface CapoFacts {
@@ -60,8 +61,8 @@ export function capoStep({ from, to, instrument, way }: CapoFacts, chance: Chanc
       shapes: [],
       spoken:
         way.capo > 0
-          ? `The neck with a capo at fret ${fretName(instrument, way.capo)}. Behind it the strings sound ${listed(dots.filter(({ fret }) => fret === way.capo).map(({ label }) => label))}.`
-          : `The neck without a capo. The open strings are ${listed(dots.map(({ label }) => label))}.`,
+          ? `The neck with a capo at fret ${fretName(instrument, way.capo)}. Behind it the strings sound ${listWords(dots.filter(({ fret }) => fret === way.capo).map(({ label }) => label))}.`
+          : `The neck without a capo. The open strings are ${listWords(dots.map(({ label }) => label))}.`,
     },
     question: {
       kind: "neck",
@@ -81,7 +82,7 @@ function withCapo({ to, instrument, way }: CapoFacts, tuned: Instrument, bare: K
   const moves = before.map((name, k) => `${name} to ${after[k]}`);
   const shapes = sign({ tonic: way.shapeKey, mode: to.mode });
   return [
-    `The capo is a new nut. At fret ${fretName(instrument, way.capo)} every string sounds ${count(up, "semitone")} higher, one for each semitone of the neck: ${listed(moves)}.`,
+    `The capo is a new nut. At fret ${fretName(instrument, way.capo)} every string sounds ${count(up, "semitone")} higher, one for each semitone of the neck: ${listWords(moves)}.`,
     way.retune === 0
       ? `So ${shapes} shapes sound in ${sign(to)}: ${shapes} and ${count(up, "semitone")}.`
       : `The strings were moved by ${signed(way.retune)} first, so ${shapes} shapes sound in ${sign(bare)}, and with the capo's ${signed(up)} in ${sign(to)}.`,

@@ -6,12 +6,13 @@ import { distanceWords } from "../../music/moveWords";
 import { glyphs, pitchClass } from "../../music/pitch";
 import type { Way } from "../../ways/way";
 import type { NeckAnswer, Verdict } from "../coachQuestion";
-import { listed } from "../degrees";
 import { movableShapes, rootFrets, type MovableShape } from "../movableShapes";
 import type { NumberedChord } from "../numberedChords";
 import { picked, shuffled, type Chance } from "../seeded";
-import { retuned, soundAt, stringLetters } from "../tunedNeck";
+import { soundAt } from "../../instruments/soundAt";
+import { retuned, stringLetters } from "../tunedNeck";
 import type { LeftOut, NeckDot, WhyStep } from "../whyStep";
+import { listWords } from "../../music/listWords";
 
 const mostShapes = 3;
 /** Frets that are offered for an answer. */
@@ -50,7 +51,7 @@ export function neckStep(
     title,
     words: [
       `A shape without open strings can be pushed along the neck: one fret further is one semitone higher. Its root names the chord.`,
-      `${glyphs(home.text)} lies here with its root on the ${listed(unique(shapes.map(({ rootString }) => letters[rootString]!)))} string${unique(shapes.map(({ rootString }) => letters[rootString]!)).length > 1 ? "s" : ""}. With these you play in every key without a capo${way.retune === 0 ? "" : "; the strings are as this way tunes them"}.`,
+      `${glyphs(home.text)} lies here with its root on the ${listWords(unique(shapes.map(({ rootString }) => letters[rootString]!)))} string${unique(shapes.map(({ rootString }) => letters[rootString]!)).length > 1 ? "s" : ""}. With these you play in every key without a capo${way.retune === 0 ? "" : "; the strings are as this way tunes them"}.`,
     ],
     picture: {
       kind: "neck",

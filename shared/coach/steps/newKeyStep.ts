@@ -4,10 +4,11 @@ import { keyWords } from "../../music/keyWords";
 import { distanceWords } from "../../music/moveWords";
 import { glyphs } from "../../music/pitch";
 import { chordNumber } from "../../songs/chordNumbers";
-import { degreesOf, degreeWord, listed, numberGlyphs } from "../degrees";
+import { degreesOf, degreeWord, numberGlyphs } from "../degrees";
 import { semitonesUp, type NumberedChord } from "../numberedChords";
 import { picked, shuffled, type Chance } from "../seeded";
 import type { LeftOut, WhyStep } from "../whyStep";
+import { listWords } from "../../music/listWords";
 
 const offered = 4;
 const named = 5;
@@ -50,7 +51,7 @@ export function newKeyStep(
     kind: "new-key",
     title,
     words: [
-      `${now} lies ${distanceWords(near)} ${near < 0 ? "under" : "over"} ${old}, or ${distanceWords(12 - Math.abs(near))} ${near < 0 ? "over" : "under"} it. Numbers stay, names change: ${listed(
+      `${now} lies ${distanceWords(near)} ${near < 0 ? "under" : "over"} ${old}, or ${distanceWords(12 - Math.abs(near))} ${near < 0 ? "over" : "under"} it. Numbers stay, names change: ${listWords(
         chords.slice(0, named).map(({ roman, sounding }) => `${numberGlyphs(roman)} is now ${glyphs(sounding)}`),
       )}.`,
       "Every chord moves by the same distance, so the song is the same song, only lower or higher.",

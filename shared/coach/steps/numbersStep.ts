@@ -2,10 +2,11 @@ import type { KeyName } from "../../music/keyName";
 import { keyWords } from "../../music/keyWords";
 import { glyphs } from "../../music/pitch";
 import { chordNumber } from "../../songs/chordNumbers";
-import { degreesOf, degreeWord, listed, numberGlyphs } from "../degrees";
+import { degreesOf, degreeWord, numberGlyphs } from "../degrees";
 import { triadOn, type NumberedChord } from "../numberedChords";
 import { picked, shuffled, type Chance } from "../seeded";
 import type { LeftOut, WhyStep } from "../whyStep";
+import { listWords } from "../../music/listWords";
 
 /** How many chords are named in a sentence. */
 const named = 5;
@@ -48,7 +49,7 @@ export function numbersStep(chords: readonly NumberedChord[], key: KeyName, chan
     kind: "numbers",
     title,
     words: [
-      `A chord has the number of its root in the scale of ${name}: ${listed(
+      `A chord has the number of its root in the scale of ${name}: ${listWords(
         chords
           .slice(0, named)
           .map(({ written, roman, plain }) => `${glyphs(written)} is ${numberGlyphs(roman)} (${numberGlyphs(plain)})`),

@@ -6,10 +6,10 @@ import { distanceWords } from "../../music/moveWords";
 import { glyphs, pitchClass } from "../../music/pitch";
 import type { Way } from "../../ways/way";
 import type { Verdict } from "../coachQuestion";
-import { listed } from "../degrees";
 import { picked, type Chance } from "../seeded";
 import { retuned, stringLetters } from "../tunedNeck";
 import type { LeftOut, WhyStep } from "../whyStep";
+import { listWords } from "../../music/listWords";
 
 /**
  * Why a retune keeps the shapes: every string moves alike, so every interval stays.
@@ -46,11 +46,11 @@ export function retuneStep(
     kind: "retune",
     title,
     words: [
-      `Every string goes ${direction} by ${size}: ${listed(strings.map((string) => `${string.from} to ${string.to}`))}.`,
+      `Every string goes ${direction} by ${size}: ${listWords(strings.map((string) => `${string.from} to ${string.to}`))}.`,
       ...(gaps.length === 0
         ? []
         : [
-            `Between neighbours nothing changes: ${listed(gaps.map((gap) => `${Math.abs(gap)}`))} semitones before, the same after. Your fingers find the same distances, so every shape stays what it was.`,
+            `Between neighbours nothing changes: ${listWords(gaps.map((gap) => `${Math.abs(gap)}`))} semitones before, the same after. Your fingers find the same distances, so every shape stays what it was.`,
           ]),
       `Only the sound moves: ${sounds}`,
     ],

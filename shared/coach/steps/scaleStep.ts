@@ -2,10 +2,11 @@ import { keyWords } from "../../music/keyWords";
 import { type KeyName, spellInKey, tonicPitchClass } from "../../music/keyName";
 import { distanceWords } from "../../music/moveWords";
 import { glyphs } from "../../music/pitch";
-import { degreesOf, degreeWord, listed, type Degree } from "../degrees";
+import { degreesOf, degreeWord, type Degree } from "../degrees";
 import { picked, type Chance } from "../seeded";
 import type { Verdict } from "../coachQuestion";
 import type { WhyStep } from "../whyStep";
+import { listWords } from "../../music/listWords";
 
 const stepWords: Record<number, string> = { 1: "half", 2: "whole", 3: "one and a half" };
 
@@ -26,7 +27,7 @@ export function scaleStep(key: KeyName, chance: Chance): WhyStep {
     kind: "scale",
     title: `The scale of ${name}`,
     words: [
-      `Your chart is written in ${name}. Its seven notes are ${listed(notes)}; the home note ${notes[0]} is number 1.`,
+      `Your chart is written in ${name}. Its seven notes are ${listWords(notes)}; the home note ${notes[0]} is number 1.`,
       `From each to the next: ${gaps.map((gap) => stepWords[gap] ?? String(gap)).join(", ")}. A half step is one semitone, a whole one two.`,
     ],
     picture: {

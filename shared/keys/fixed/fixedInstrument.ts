@@ -1,6 +1,7 @@
 import { keyFifths, type KeyName, spellTonic, tonicPitchClass } from "../../music/keyName";
 import { keySign } from "../../music/keyWords";
 import { glyphs } from "../../music/pitch";
+import { listWords } from "../../music/listWords";
 
 /** An instrument that is made in one key and cannot be moved. */
 export interface FixedInstrument {
@@ -128,8 +129,8 @@ export function fitSentence(key: KeyName, instruments: readonly FixedInstrument[
   const named = (fits: boolean) =>
     instruments.filter((each) => keyFit(each, key).fits === fits).map((each) => `the ${fixedName(each)}`);
   const [yes, no] = [named(true), named(false)];
-  if (yes.length === 0) return `Does not fit ${joined(no, "or")}.`;
-  return `Fits ${joined(yes, "and")}${no.length === 0 ? "" : `, not ${joined(no, "or")}`}.`;
+  if (yes.length === 0) return `Does not fit ${listWords(no, "or")}.`;
+  return `Fits ${listWords(yes, "and")}${no.length === 0 ? "" : `, not ${listWords(no, "or")}`}.`;
 }
 
 /**
@@ -140,13 +141,8 @@ export function fitSentence(key: KeyName, instruments: readonly FixedInstrument[
  * @example keyList([{ tonic: "D", mode: "major" }, { tonic: "G", mode: "major" }]) // => "D or G"
  */
 export function keyList(keys: readonly KeyName[]): string {
-  return joined(
+  return listWords(
     keys.map((key) => glyphs(keySign(key))),
     "or",
   );
-}
-
-function joined(items: readonly string[], word: "and" | "or"): string {
-  const last = items.at(-1) ?? "";
-  return items.length < 2 ? last : `${items.slice(0, -1).join(", ")} ${word} ${last}`;
 }

@@ -10,9 +10,9 @@ import { Select } from "@/features/ui/Select";
 import { Text } from "@/features/ui/Text";
 import type { PersonFacts } from "@/shared/contract/account";
 import { accountQueries } from "../accountQueries";
-import { FormEnd } from "../forms/FormEnd";
-import { FormField } from "../forms/FormField";
-import { useAccountForm } from "../forms/useAccountForm";
+import { FormEnd } from "@/features/ui/form/FormEnd";
+import { FormField } from "@/features/ui/form/FormField";
+import { useServerForm } from "@/features/api/useServerForm";
 import { countryOptions } from "./countryOptions";
 
 const checkYear = (year: string) =>
@@ -22,7 +22,7 @@ function FactsForm({ facts }: { facts: PersonFacts }) {
   const client = useQueryClient();
   const [kept, setKept] = useState(false);
   const start = { birthYear: facts.birthYear === null ? "" : String(facts.birthYear), country: facts.country ?? "" };
-  const { form, end, submit } = useAccountForm(start, async ({ birthYear, country }) => {
+  const { form, end, submit } = useServerForm(start, async ({ birthYear, country }) => {
     setKept(false);
     const told: PersonFacts = {
       birthYear: birthYear.trim() === "" ? null : Number(birthYear),

@@ -7,15 +7,15 @@ import { Heading } from "@/features/ui/Heading";
 import { Text } from "@/features/ui/Text";
 import { Button } from "@/features/ui/Button";
 import type { Erasure } from "@/shared/contract/account";
-import { FormEnd } from "../forms/FormEnd";
-import { KnownPasswordField } from "../forms/FormField";
-import { useAccountForm } from "../forms/useAccountForm";
+import { FormEnd } from "@/features/ui/form/FormEnd";
+import { KnownPasswordField } from "../forms/PasswordField";
+import { useServerForm } from "@/features/api/useServerForm";
 import { View } from "react-native";
 
 /** Says what happens, and asks the password before it does. */
 export function EraseAccount({ onErased }: { onErased: (eraseAt: string) => void }) {
   const [asked, setAsked] = useState(false);
-  const { form, end, submit } = useAccountForm({ password: "" }, async (typed) => {
+  const { form, end, submit } = useServerForm({ password: "" }, async (typed) => {
     const { eraseAt } = await http.post<Erasure>("/account/erasure", typed);
     onErased(eraseAt);
     session.leave();

@@ -3,9 +3,10 @@ import { Form } from "@/features/ui/Form";
 import type { MoveInState } from "@/features/api/moveIn";
 import type { SignInRequest } from "@/shared/contract/account";
 import { checkAddress } from "../forms/checkPassword";
-import { FormEnd } from "../forms/FormEnd";
-import { FormField, PasswordField } from "../forms/FormField";
-import { useAccountForm } from "../forms/useAccountForm";
+import { FormEnd } from "@/features/ui/form/FormEnd";
+import { FormField } from "@/features/ui/form/FormField";
+import { PasswordField } from "../forms/PasswordField";
+import { useServerForm } from "@/features/api/useServerForm";
 import { movingWords } from "./movingWords";
 
 interface CredentialsFormProps {
@@ -28,7 +29,7 @@ interface CredentialsFormProps {
 /** E-mail address and password. Whatever goes wrong, what was typed stays. */
 export function CredentialsForm(props: CredentialsFormProps) {
   const { entering, progress } = props;
-  const { form, end, submit } = useAccountForm<SignInRequest>(
+  const { form, end, submit } = useServerForm<SignInRequest>(
     { email: props.email, password: "" },
     ({ email, password }) => props.enter({ email: email.trim(), password }),
   );

@@ -5,16 +5,16 @@ import { Form } from "@/features/ui/Form";
 import { Heading } from "@/features/ui/Heading";
 import { Text } from "@/features/ui/Text";
 import { checkCode } from "../forms/checkPassword";
-import { FormEnd } from "../forms/FormEnd";
-import { FormField } from "../forms/FormField";
-import { useAccountForm } from "../forms/useAccountForm";
+import { FormEnd } from "@/features/ui/form/FormEnd";
+import { FormField } from "@/features/ui/form/FormField";
+import { useServerForm } from "@/features/api/useServerForm";
 import { movingWords } from "./movingWords";
 import { MovesIn } from "./MovesIn";
 import type { useEntry } from "./useEntry";
 
 /** After the password: the code of the app, or a recovery code. */
 export function SecondStepForm({ entry }: { entry: ReturnType<typeof useEntry> }) {
-  const { form, end, submit } = useAccountForm({ code: "" }, ({ code }) => entry.secondStep(code.trim()));
+  const { form, end, submit } = useServerForm({ code: "" }, ({ code }) => entry.secondStep(code.trim()));
   const field = useRef<HTMLDivElement>(null);
   useEffect(() => field.current?.querySelector("input")?.focus(), []);
   return (

@@ -6,15 +6,15 @@ import { LinkButton } from "@/features/ui/LinkButton";
 import { Notice } from "@/features/ui/Notice";
 import { Text } from "@/features/ui/Text";
 import { checkAddress } from "../forms/checkPassword";
-import { FormEnd } from "../forms/FormEnd";
-import { FormField } from "../forms/FormField";
-import { useAccountForm } from "../forms/useAccountForm";
+import { FormEnd } from "@/features/ui/form/FormEnd";
+import { FormField } from "@/features/ui/form/FormField";
+import { useServerForm } from "@/features/api/useServerForm";
 import { NarrowCard } from "./NarrowCard";
 
 /** Asks for a link to choose a new password. Says the same whether or not the address is known. */
 export function ForgottenForm() {
   const [sentTo, setSentTo] = useState<string | null>(null);
-  const { form, end, submit } = useAccountForm({ email: "" }, async ({ email }) => {
+  const { form, end, submit } = useServerForm({ email: "" }, async ({ email }) => {
     setSentTo(null);
     await http.open("/auth/forgotten", { email: email.trim() });
     setSentTo(email.trim());

@@ -6,9 +6,9 @@ import { EmptyState } from "@/features/ui/EmptyState";
 import { Form } from "@/features/ui/Form";
 import { LinkButton } from "@/features/ui/LinkButton";
 import { checkNewPassword } from "../forms/checkPassword";
-import { FormEnd } from "../forms/FormEnd";
-import { PasswordField } from "../forms/FormField";
-import { useAccountForm } from "../forms/useAccountForm";
+import { FormEnd } from "@/features/ui/form/FormEnd";
+import { PasswordField } from "../forms/PasswordField";
+import { useServerForm } from "@/features/api/useServerForm";
 import { tokenInAddress } from "./linkToken";
 import { useAddressCleared } from "./useAddressCleared";
 import { NarrowCard } from "./NarrowCard";
@@ -18,7 +18,7 @@ export function ResetForm() {
   const [token] = useState(tokenInAddress);
   const [state, setState] = useState<"open" | "done" | "not-valid">(token === "" ? "not-valid" : "open");
   useAddressCleared();
-  const { form, end, submit } = useAccountForm({ password: "" }, async ({ password }) => {
+  const { form, end, submit } = useServerForm({ password: "" }, async ({ password }) => {
     try {
       await http.open("/auth/reset", { token, password });
     } catch (error) {

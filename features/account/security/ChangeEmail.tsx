@@ -7,14 +7,15 @@ import { Notice } from "@/features/ui/Notice";
 import { Text } from "@/features/ui/Text";
 import type { Account } from "@/shared/contract/account";
 import { checkAddress } from "../forms/checkPassword";
-import { FormEnd } from "../forms/FormEnd";
-import { FormField, KnownPasswordField } from "../forms/FormField";
-import { useAccountForm } from "../forms/useAccountForm";
+import { FormEnd } from "@/features/ui/form/FormEnd";
+import { FormField } from "@/features/ui/form/FormField";
+import { KnownPasswordField } from "../forms/PasswordField";
+import { useServerForm } from "@/features/api/useServerForm";
 
 /** Another address for the account; the present one stays until the new one is confirmed. */
 export function ChangeEmail({ account }: { account: Account }) {
   const [sentTo, setSentTo] = useState<string | null>(null);
-  const { form, end, submit } = useAccountForm({ email: "", password: "" }, async (typed) => {
+  const { form, end, submit } = useServerForm({ email: "", password: "" }, async (typed) => {
     setSentTo(null);
     const email = typed.email.trim();
     await http.post("/account/email", { email, password: typed.password });

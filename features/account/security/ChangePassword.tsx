@@ -6,9 +6,9 @@ import { Form } from "@/features/ui/Form";
 import { Heading } from "@/features/ui/Heading";
 import { Notice } from "@/features/ui/Notice";
 import { checkNewPassword } from "../forms/checkPassword";
-import { FormEnd } from "../forms/FormEnd";
-import { KnownPasswordField, PasswordField } from "../forms/FormField";
-import { useAccountForm } from "../forms/useAccountForm";
+import { FormEnd } from "@/features/ui/form/FormEnd";
+import { KnownPasswordField, PasswordField } from "../forms/PasswordField";
+import { useServerForm } from "@/features/api/useServerForm";
 import { ApiError } from "@/features/api/apiError";
 import { accountQueries } from "../accountQueries";
 
@@ -22,7 +22,7 @@ function placed(error: unknown): unknown {
 export function ChangePassword() {
   const client = useQueryClient();
   const [done, setDone] = useState(false);
-  const { form, end, submit } = useAccountForm({ present: "", next: "" }, async (typed) => {
+  const { form, end, submit } = useServerForm({ present: "", next: "" }, async (typed) => {
     setDone(false);
     await http.post("/account/password", typed).catch((error: unknown) => {
       throw placed(error);

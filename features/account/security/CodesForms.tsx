@@ -3,9 +3,10 @@ import { Form } from "@/features/ui/Form";
 import { Text } from "@/features/ui/Text";
 import type { RecoveryCodes } from "@/shared/contract/account";
 import { checkCode } from "../forms/checkPassword";
-import { FormEnd } from "../forms/FormEnd";
-import { FormField, KnownPasswordField } from "../forms/FormField";
-import { useAccountForm } from "../forms/useAccountForm";
+import { FormEnd } from "@/features/ui/form/FormEnd";
+import { FormField } from "@/features/ui/form/FormField";
+import { KnownPasswordField } from "../forms/PasswordField";
+import { useServerForm } from "@/features/api/useServerForm";
 import { NotNow } from "./EnrolForms";
 
 interface BothProps {
@@ -18,7 +19,7 @@ interface BothProps {
 
 /** Password and code together, before something that weakens or renews the second step. */
 function PasswordAndCode({ label, text, busyLabel, send, onBack }: BothProps) {
-  const { form, end, submit } = useAccountForm({ password: "", code: "" }, (typed) =>
+  const { form, end, submit } = useServerForm({ password: "", code: "" }, (typed) =>
     send({ password: typed.password, code: typed.code.trim() }),
   );
   return (

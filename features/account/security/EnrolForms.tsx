@@ -5,9 +5,10 @@ import { Form } from "@/features/ui/Form";
 import { Text } from "@/features/ui/Text";
 import type { RecoveryCodes, SecondFactorSetup } from "@/shared/contract/account";
 import { checkCode } from "../forms/checkPassword";
-import { FormEnd } from "../forms/FormEnd";
-import { FormField, KnownPasswordField } from "../forms/FormField";
-import { useAccountForm } from "../forms/useAccountForm";
+import { FormEnd } from "@/features/ui/form/FormEnd";
+import { FormField } from "@/features/ui/form/FormField";
+import { KnownPasswordField } from "../forms/PasswordField";
+import { useServerForm } from "@/features/api/useServerForm";
 
 export function NotNow({ onBack }: { onBack: () => void }) {
   return (
@@ -19,7 +20,7 @@ export function NotNow({ onBack }: { onBack: () => void }) {
 
 /** First the password, so that nobody at an unlocked device switches codes on. */
 export function BeginForm({ onBegun, onBack }: { onBegun: (setup: SecondFactorSetup) => void; onBack: () => void }) {
-  const { form, end, submit } = useAccountForm({ password: "" }, async (typed) =>
+  const { form, end, submit } = useServerForm({ password: "" }, async (typed) =>
     onBegun(await http.post<SecondFactorSetup>("/account/second-factor", typed)),
   );
   return (
@@ -37,7 +38,7 @@ export function ConfirmForm(props: {
   onOn: (codes: readonly string[]) => void;
   onBack: () => void;
 }) {
-  const { form, end, submit } = useAccountForm({ code: "" }, async ({ code }) => {
+  const { form, end, submit } = useServerForm({ code: "" }, async ({ code }) => {
     const answer = await http.post<RecoveryCodes>("/account/second-factor/confirm", { code: code.trim() });
     props.onOn(answer.recoveryCodes);
   });

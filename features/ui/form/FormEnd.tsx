@@ -1,8 +1,17 @@
+import type { RefObject } from "react";
 import { View } from "react-native";
-import { Button } from "@/features/ui/Button";
-import { LiveText } from "@/features/ui/LiveText";
-import { Notice } from "@/features/ui/Notice";
-import type { FormProgress } from "./useAccountForm";
+import { Button } from "../Button";
+import { LiveText } from "../LiveText";
+import { Notice } from "../Notice";
+
+/** How far the sending of a form has come. */
+export interface FormProgress {
+  /** what was refused and belongs to no field */
+  refusal: { code: string; message: string } | null;
+  sending: boolean;
+  /** where the refusal stands, so that it can take the focus */
+  problem: RefObject<HTMLDivElement | null>;
+}
 
 interface FormEndProps extends FormProgress {
   sendLabel: string;

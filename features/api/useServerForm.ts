@@ -1,9 +1,9 @@
 import { useEffect, useRef, useState, type RefObject } from "react";
 import { useForm, type DefaultValues, type FieldValues, type Path, type UseFormReturn } from "react-hook-form";
-import { ApiError } from "@/features/api/apiError";
+import { ApiError } from "./apiError";
 
 /** How far the sending of a form has come. */
-export interface FormProgress {
+interface FormProgress {
   /** what was refused and belongs to no field */
   refusal: ApiError | null;
   sending: boolean;
@@ -11,7 +11,7 @@ export interface FormProgress {
   problem: RefObject<HTMLDivElement | null>;
 }
 
-interface AccountForm<Values extends FieldValues> {
+interface ServerForm<Values extends FieldValues> {
   form: UseFormReturn<Values>;
   /** what the foot of the form shows */
   end: FormProgress;
@@ -20,10 +20,10 @@ interface AccountForm<Values extends FieldValues> {
 }
 
 /** A form whose typed text stays whatever goes wrong. `send` rejects with ApiError; `place` may name the field of a refusal. */
-export function useAccountForm<Values extends FieldValues>(
+export function useServerForm<Values extends FieldValues>(
   defaultValues: DefaultValues<Values>,
   send: (values: Values) => Promise<void>,
-): AccountForm<Values> {
+): ServerForm<Values> {
   const [refusal, setRefusal] = useState<ApiError | null>(null);
   const [sending, setSending] = useState(false);
   const form = useForm<Values>({ defaultValues, shouldFocusError: false });

@@ -21,6 +21,7 @@ const names = [
   "Accounts1782100000000",
   "Arrangements1784000000000",
   "LineUps1785000000000",
+  "Studios1796100000000",
 ];
 const applied = () => database.query("SELECT name FROM migrations ORDER BY id");
 const tables = async () => {

@@ -8,6 +8,15 @@ import { TryEntity } from "../keys/try.entity";
 import { SheetLinkEntity } from "../sheets/sheetLink.entity";
 import { LineUpEntity } from "../lineUps/lineUp.entity";
 import { SongEntity } from "../songs/song.entity";
+import { AssignmentEntity } from "../studio/assignments/assignment.entity";
+import { AssignmentPartEntity } from "../studio/assignments/assignmentPart.entity";
+import { CommentEntity } from "../studio/assignments/comment.entity";
+import { GuardianEntity } from "../studio/consent/guardian.entity";
+import { StudioGroupEntity } from "../studio/groups/studioGroup.entity";
+import { StudioGroupMemberEntity } from "../studio/groups/studioGroupMember.entity";
+import { StudioInviteEntity } from "../studio/invites/studioInvite.entity";
+import { StudioEntity } from "../studio/studio.entity";
+import { StudioMemberEntity } from "../studio/studioMember.entity";
 import { TakeEntity } from "../voices/take.entity";
 import { VoiceEntity } from "../voices/voice.entity";
 import { PlayerWishesEntity } from "../ways/playerWishes.entity";
@@ -23,6 +32,7 @@ import { PlayerWishes1779000000000 } from "./migrations/PlayerWishes177900000000
 import { SheetLinks1780000000000 } from "./migrations/SheetLinks1780000000000";
 import { SongRevisions1769904000000 } from "./migrations/SongRevisions1769904000000";
 import { SongVersions1772323200000 } from "./migrations/SongVersions1772323200000";
+import { Studios1796100000000 } from "./migrations/Studios1796100000000";
 
 const common: Pick<
   Extract<DataSourceOptions, { type: "postgres" }>,
@@ -41,6 +51,15 @@ const common: Pick<
     SheetLinkEntity,
     LineUpEntity,
     ArrangementEntity,
+    StudioEntity,
+    StudioMemberEntity,
+    StudioGroupEntity,
+    StudioGroupMemberEntity,
+    StudioInviteEntity,
+    GuardianEntity,
+    AssignmentEntity,
+    AssignmentPartEntity,
+    CommentEntity,
   ],
   synchronize: false,
   uuidExtension: "pgcrypto",
@@ -87,6 +106,7 @@ export function createMigrationSource(url: string): DataSource {
       Accounts1782100000000,
       Arrangements1784000000000,
       LineUps1785000000000,
+      Studios1796100000000,
     ],
     migrationsTransactionMode: "all",
   });

@@ -30,12 +30,15 @@ import { songsRoutes } from "./songs/songs.router";
 import type { FakeSmtp } from "./mail/inbox/fakeSmtp";
 import { inboxPage } from "./mail/inbox/inboxPage";
 import { mailRoutes } from "./mail/mail.router";
+import { type ObjectStore, storageOrigin } from "./storage/objectStore";
 import { voicesRoutes } from "./voices/voices.router";
 import { playerWishesRoutes } from "./ways/playerWishes.router";
 
 type AppSettings = Pick<Env, "tokenSecret" | "publicOrigin" | "trustProxy" | "staticDir"> & {
   /** where mails go that are really sent to nobody; shown at /dev/inbox */
   fakeSmtp?: FakeSmtp | undefined;
+  /** where recordings are kept */
+  objects: ObjectStore;
 };
 
 /** Puts the server together; the only place that knows all its parts. */
@@ -44,7 +47,9 @@ export function createApp(dataSource: DataSource, logger: Logger, settings: AppS
   app.disable("x-powered-by");
   app.set("trust proxy", settings.trustProxy);
   app.use(requestLog(logger));
-  app.use(securityHeaders(settings.publicOrigin?.startsWith("https:") ?? false));
+  app.use(
+    securityHeaders(settings.publicOrigin?.startsWith("https:") ?? false, storageOrigin(settings.objects.settings)),
+  );
 
   const api = new Api(createGuard(dataSource, settings.tokenSecret));
   const parts = authParts(dataSource, settings);
@@ -63,7 +68,10 @@ export function createApp(dataSource: DataSource, logger: Logger, settings: AppS
   chartsRoutes(api, dataSource);
   mailRoutes(api, dataSource, settings);
   sheetsRoutes(api, dataSource);
-  adminRoutes(api, dataSource, { tokenSecret: settings.tokenSecret, stores: [] });
+  adminRoutes(api, dataSource, {
+    tokenSecret: settings.tokenSecret,
+    stores: [{ name: "recordings", isUp: () => settings.objects.isUp() }],
+  });
   healthRoutes(api, dataSource);
   descriptionRoutes(api);
 

@@ -8,6 +8,10 @@ const inProduction = {
   TOKEN_SECRET: "x".repeat(32),
   PUBLIC_URL: "https://larkspan.example",
   SMTP_URL: "smtps://mail.example",
+  S3_ENDPOINT: "https://s3.example",
+  S3_BUCKET: "takes",
+  S3_ACCESS_KEY_ID: "key",
+  S3_SECRET_ACCESS_KEY: "secret",
 };
 
 function faults(source: Record<string, string>): string[] {
@@ -34,6 +38,8 @@ it("needs the address of a database and nothing else to develop", () => {
     demo: true,
     smtpUrl: null,
     mailFrom: "Larkspan <no-reply@localhost>",
+    storage: null,
+    storageDir: ".data/storage",
   });
   expect(Buffer.byteLength(env.tokenSecret)).toBeGreaterThanOrEqual(32);
   expect(readEnv({ DATABASE_URL: database }).tokenSecret).not.toBe(env.tokenSecret);
@@ -61,6 +67,23 @@ it("reads where it stands behind a proxy", () => {
   expect(readEnv({ ...behind, TRUST_PROXY: "loopback, 10.0.0.0/8" }).trustProxy).toBe("loopback, 10.0.0.0/8");
 });
 
+it("reads where recordings are kept, and whether browsers reach it elsewhere", () => {
+  const storage = { endpoint: "https://s3.example", bucket: "takes", accessKeyId: "key", secretAccessKey: "secret" };
+  expect(readEnv(inProduction).storage).toEqual({
+    ...storage,
+    publicEndpoint: "https://s3.example",
+    region: "us-east-1",
+    pathStyle: true,
+  });
+  const elsewhere = { S3_PUBLIC_ENDPOINT: "https://sound.example", S3_REGION: "eu-north-1", S3_PATH_STYLE: "0" };
+  expect(readEnv({ ...inProduction, ...elsewhere }).storage).toEqual({
+    ...storage,
+    publicEndpoint: "https://sound.example",
+    region: "eu-north-1",
+    pathStyle: false,
+  });
+});
+
 it("names every wrong variable in one go", () => {
   const lines = faults({
     NODE_ENV: "production",
@@ -72,6 +95,9 @@ it("names every wrong variable in one go", () => {
     DEMO: "maybe",
     SMTP_URL: "mail.example",
     MAIL_FROM: "Larkspan",
+    S3_ENDPOINT: "s3.example",
+    S3_BUCKET: "takes",
+    S3_ACCESS_KEY_ID: "key",
   });
   expect(lines.map((line) => line.split(" ")[0]).sort()).toEqual(
     [
@@ -81,6 +107,8 @@ it("names every wrong variable in one go", () => {
       "MAIL_FROM",
       "PORT",
       "PUBLIC_URL",
+      "S3_ENDPOINT",
+      "S3_SECRET_ACCESS_KEY",
       "SMTP_URL",
       "TOKEN_SECRET",
       "TRUST_PROXY",
@@ -97,6 +125,8 @@ it.each([
   [{ ...inProduction, TOKEN_SECRET: "" }, "TOKEN_SECRET is required in production"],
   [{ ...inProduction, PUBLIC_URL: "" }, "PUBLIC_URL is required in production"],
   [{ ...inProduction, SMTP_URL: "" }, "SMTP_URL is required in production"],
+  [{ ...inProduction, S3_BUCKET: "" }, "S3_BUCKET is required in production"],
+  [{ ...inProduction, NODE_ENV: "development", S3_ENDPOINT: "" }, "S3_ENDPOINT is required in production, and with"],
   [{ DATABASE_URL: database, MAIL_FROM: "Larkspan <>" }, "MAIL_FROM must be an address"],
   [{ DATABASE_URL: database, PUBLIC_URL: "larkspan.example" }, "PUBLIC_URL must be an address"],
   [{ DATABASE_URL: database, PUBLIC_URL: "https://example.org/larkspan" }, "PUBLIC_URL must not have a path"],

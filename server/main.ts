@@ -10,6 +10,8 @@ import { migrate } from "./database/migrate";
 import { EnvError, readEnv } from "./env";
 import { createLogger } from "./http/requestLog";
 import { startWorker } from "./jobs/jobWorker";
+import type { FakeS3 } from "./storage/fake/fakeS3";
+import { ObjectStore } from "./storage/objectStore";
 
 /** How long a request may still take after the server was told to stop. */
 const patienceMs = 5000;
@@ -32,7 +34,10 @@ async function main(): Promise<void> {
     env.smtpUrl === null && !env.production
       ? await (await import("./mail/inbox/fakeSmtp")).FakeSmtp.start()
       : undefined;
-  const { app } = createApp(dataSource, logger, { ...env, fakeSmtp });
+  const fakeS3 =
+    env.storage === null ? await (await import("./storage/fake/fakeS3")).FakeS3.start(env.storageDir) : undefined;
+  const objects = new ObjectStore(env.storage ?? (fakeS3 as FakeS3).settings);
+  const { app } = createApp(dataSource, logger, { ...env, fakeSmtp, objects });
   const server = createServer(app);
   await new Promise<void>((resolve, reject) => {
     server.once("error", (error: NodeJS.ErrnoException) => {
@@ -64,7 +69,7 @@ async function main(): Promise<void> {
     const served = new Promise<void>((resolve) => server.close(() => resolve()));
     void Promise.all([served, worker.stop()]).then(async () => {
       jobs.close();
-      await Promise.all([dataSource.destroy(), fakeSmtp?.stop()]);
+      await Promise.all([dataSource.destroy(), fakeSmtp?.stop(), fakeS3?.stop()]);
     });
   };
   process.on("SIGINT", stop);

@@ -72,6 +72,10 @@ it("prints how to get into the demonstration, and only where there is one", asyn
     TOKEN_SECRET: "x".repeat(32),
     PUBLIC_URL: "http://127.0.0.1:1",
     SMTP_URL: "smtp://127.0.0.1:1",
+    S3_ENDPOINT: "http://127.0.0.1:1",
+    S3_BUCKET: "takes",
+    S3_ACCESS_KEY_ID: "key",
+    S3_SECRET_ACCESS_KEY: "secret",
   };
   const hidden = start({ DATABASE_URL: database.url, PORT: "0", ...production });
   for (const server of [shown, hidden]) {
@@ -104,6 +108,10 @@ it("says in plain lines, all at once, what is wrong with its environment", async
     expect.stringMatching(/^ {2}TOKEN_SECRET is required in production/),
     expect.stringMatching(/^ {2}PUBLIC_URL is required in production/),
     expect.stringMatching(/^ {2}SMTP_URL is required in production/),
+    expect.stringMatching(/^ {2}S3_ENDPOINT is required in production/),
+    expect.stringMatching(/^ {2}S3_BUCKET is required in production/),
+    expect.stringMatching(/^ {2}S3_ACCESS_KEY_ID is required in production/),
+    expect.stringMatching(/^ {2}S3_SECRET_ACCESS_KEY is required in production/),
     "",
   ]);
 });

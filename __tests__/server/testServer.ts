@@ -14,6 +14,8 @@ import type { Api } from "../../server/http/api";
 import { createLogger } from "../../server/http/requestLog";
 import { workOffQueue } from "../../server/jobs/jobWorker";
 import { FakeSmtp } from "../../server/mail/inbox/fakeSmtp";
+import { FakeS3 } from "../../server/storage/fake/fakeS3";
+import { ObjectStore } from "../../server/storage/objectStore";
 import { createTestDatabase, type TestDatabase } from "./testDatabase";
 
 export const tokenSecret = "a secret of the tests, long enough for HS256";
@@ -30,6 +32,8 @@ export interface TestServer {
   dataSource: DataSource;
   /** where its mails go */
   smtp: FakeSmtp;
+  /** where its recordings lie */
+  s3: FakeS3;
   /** does what waits in the queue and is due */
   runJobs: () => Promise<void>;
   close: () => Promise<void>;
@@ -44,12 +48,14 @@ export async function startTestServer(
   const dataSource = await createDataSource(database.url, () => undefined).initialize();
   const nothing = mkdtempSync(path.join(tmpdir(), "larkspan-nothing-"));
   const smtp = await FakeSmtp.start();
+  const s3 = await FakeS3.start(path.join(nothing, "storage"));
   const { app, api } = createApp(dataSource, logger, {
     tokenSecret,
     publicOrigin: null,
     trustProxy: false,
     staticDir: nothing,
     fakeSmtp: smtp,
+    objects: new ObjectStore(s3.settings),
     ...settings,
   });
   const jobs = createJobs(dataSource, {
@@ -60,11 +66,11 @@ export async function startTestServer(
   });
   const close = async () => {
     jobs.close();
-    await smtp.stop();
+    await Promise.all([smtp.stop(), s3.stop()]);
     if (dataSource.isInitialized) await dataSource.destroy();
     await database.drop();
   };
-  return { app, api, database, dataSource, smtp, runJobs: () => workOffQueue(database.url, jobs), close };
+  return { app, api, database, dataSource, smtp, s3, runJobs: () => workOffQueue(database.url, jobs), close };
 }
 
 /** Somebody with an account of their own. */

@@ -3,8 +3,11 @@ import helmet from "helmet";
 
 const own = ["'self'"];
 
-/** Only this server's own scripts, fonts and workers; the microphone only for its own pages. */
-export function securityHeaders(secure: boolean): RequestHandler[] {
+/**
+ * Only this server's own scripts, fonts and workers; the microphone only for its own pages. Sound may come from the storage
+ * of recordings besides, by links that it signed.
+ */
+export function securityHeaders(secure: boolean, soundOrigin: string): RequestHandler[] {
   return [
     helmet({
       contentSecurityPolicy: {
@@ -15,7 +18,7 @@ export function securityHeaders(secure: boolean): RequestHandler[] {
           scriptSrc: own,
           styleSrc: ["'self'", "'unsafe-inline'"],
           imgSrc: ["'self'", "data:", "blob:"],
-          mediaSrc: ["'self'", "blob:"],
+          mediaSrc: ["'self'", "blob:", soundOrigin],
           connectSrc: ["'self'", "blob:"],
           workerSrc: own,
           fontSrc: own,

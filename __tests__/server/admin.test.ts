@@ -64,7 +64,11 @@ describe("administrators", () => {
   it("see how queue and mail are", async () => {
     const boss = await admin();
     const { body } = await boss.get("/api/admin/health").expect(200);
-    expect(body).toMatchObject({ queue: { failed: 0 }, mail: { refused: 0 }, storage: [{ name: "recordings", up: true }] });
+    expect(body).toMatchObject({
+      queue: { failed: 0 },
+      mail: { refused: 0 },
+      storage: [{ name: "recordings", up: true }],
+    });
     expect(body.mail.sent).toBeGreaterThan(0);
   });
 });

@@ -151,7 +151,7 @@ it("allows scripts, workers, fonts and connections of its own only, and its own 
         "script-src 'self'",
         "style-src 'self' 'unsafe-inline'",
         "img-src 'self' data: blob:",
-        "media-src 'self' blob:",
+        `media-src 'self' blob: ${server.s3.settings.publicEndpoint}`,
         "connect-src 'self' blob:",
         "worker-src 'self'",
         "font-src 'self'",

@@ -30,7 +30,7 @@ import { songsRoutes } from "./songs/songs.router";
 import type { FakeSmtp } from "./mail/inbox/fakeSmtp";
 import { inboxPage } from "./mail/inbox/inboxPage";
 import { mailRoutes } from "./mail/mail.router";
-import { type ObjectStore, storageOrigin } from "./storage/objectStore";
+import { type ObjectStore, storageOrigin } from "./storage/objectStore.service";
 import { voicesRoutes } from "./voices/voices.router";
 import { playerWishesRoutes } from "./ways/playerWishes.router";
 

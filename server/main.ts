@@ -11,7 +11,7 @@ import { EnvError, readEnv } from "./env";
 import { createLogger } from "./http/requestLog";
 import { startWorker } from "./jobs/jobWorker";
 import type { FakeS3 } from "./storage/fake/fakeS3";
-import { ObjectStore } from "./storage/objectStore";
+import { ObjectStore } from "./storage/objectStore.service";
 
 /** How long a request may still take after the server was told to stop. */
 const patienceMs = 5000;

@@ -22,6 +22,7 @@ const names = [
   "Arrangements1784000000000",
   "LineUps1785000000000",
   "Studios1796100000000",
+  "HandIns1796200000000",
 ];
 const applied = () => database.query("SELECT name FROM migrations ORDER BY id");
 const tables = async () => {

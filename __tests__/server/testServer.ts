@@ -15,7 +15,7 @@ import { createLogger } from "../../server/http/requestLog";
 import { workOffQueue } from "../../server/jobs/jobWorker";
 import { FakeSmtp } from "../../server/mail/inbox/fakeSmtp";
 import { FakeS3 } from "../../server/storage/fake/fakeS3";
-import { ObjectStore } from "../../server/storage/objectStore";
+import { ObjectStore } from "../../server/storage/objectStore.service";
 import { createTestDatabase, type TestDatabase } from "./testDatabase";
 
 export const tokenSecret = "a secret of the tests, long enough for HS256";

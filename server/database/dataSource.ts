@@ -15,6 +15,7 @@ import { GuardianEntity } from "../studio/consent/guardian.entity";
 import { StudioGroupEntity } from "../studio/groups/studioGroup.entity";
 import { StudioGroupMemberEntity } from "../studio/groups/studioGroupMember.entity";
 import { StudioInviteEntity } from "../studio/invites/studioInvite.entity";
+import { HandInEntity } from "../studio/handIns/handIn.entity";
 import { StudioEntity } from "../studio/studio.entity";
 import { StudioMemberEntity } from "../studio/studioMember.entity";
 import { TakeEntity } from "../voices/take.entity";
@@ -23,6 +24,7 @@ import { PlayerWishesEntity } from "../ways/playerWishes.entity";
 import { Arrangements1784000000000 } from "./migrations/Arrangements1784000000000";
 import { Accounts1782100000000 } from "./migrations/Accounts1782100000000";
 import { FirstTables1764547200000 } from "./migrations/FirstTables1764547200000";
+import { HandIns1796200000000 } from "./migrations/HandIns1796200000000";
 import { InstrumentPhotos1778000000000 } from "./migrations/InstrumentPhotos1778000000000";
 import { KeysPerVoice1775001600000 } from "./migrations/KeysPerVoice1775001600000";
 import { KindOfTake1767225600000 } from "./migrations/KindOfTake1767225600000";
@@ -60,6 +62,7 @@ const common: Pick<
     AssignmentEntity,
     AssignmentPartEntity,
     CommentEntity,
+    HandInEntity,
   ],
   synchronize: false,
   uuidExtension: "pgcrypto",
@@ -107,6 +110,7 @@ export function createMigrationSource(url: string): DataSource {
       Arrangements1784000000000,
       LineUps1785000000000,
       Studios1796100000000,
+      HandIns1796200000000,
     ],
     migrationsTransactionMode: "all",
   });

@@ -3,7 +3,7 @@ import { tmpdir } from "node:os";
 import path from "node:path";
 import { S3 } from "@aws-sdk/client-s3";
 import { FakeS3 } from "./fake/fakeS3";
-import { clientConfig, ObjectStore, storageOrigin } from "./objectStore";
+import { clientConfig, ObjectStore, storageOrigin } from "./objectStore.service";
 
 const folder = mkdtempSync(path.join(tmpdir(), "larkspan-storage-"));
 let s3: FakeS3;

@@ -1,7 +1,7 @@
 import { failureWords } from "./sing/failureWords";
 import { bandWords } from "./noteWords";
 import type { RecorderState } from "./recorder/recorder";
-import { inTune } from "./takeOfHeard";
+import { inTune } from "@/shared/voice/shownTake";
 
 /** What is said to those who do not see the page when a step begins. */
 export function stepWords(state: RecorderState): string {

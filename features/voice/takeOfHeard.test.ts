@@ -1,7 +1,8 @@
 import { take as takeSchema } from "@/shared/contract/take";
 import type { TakeReport } from "@/shared/voice/takeReport";
 import type { HeardTake } from "./recorder/recorder";
-import { inTune, takeOfHeard } from "./takeOfHeard";
+import { inTune } from "@/shared/voice/shownTake";
+import { takeOfHeard } from "./takeOfHeard";
 
 const report: TakeReport = {
   verdict: "heard",

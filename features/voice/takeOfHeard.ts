@@ -1,12 +1,5 @@
 import type { Take } from "@/shared/contract/take";
-import type { PitchBand } from "@/shared/voice/takeReport";
 import type { HeardTake } from "./recorder/recorder";
-
-/** The same band with the singer's common offset from equal temperament taken off, so that its ends have their names. */
-export function inTune(band: PitchBand, tuningCents: number): PitchBand {
-  const offset = tuningCents / 100;
-  return { lowMidi: band.lowMidi - offset, highMidi: band.highMidi - offset };
-}
 
 /**
  * A heard take as it is kept: numbers only, as sung. The sound is not part of it.

@@ -3,7 +3,7 @@ import { useMemo } from "react";
 import type { Voice } from "@/shared/contract/voice";
 import type { SingingVoice } from "@/shared/keys/keyScore";
 import { useChosenVoiceId } from "./chosenVoice";
-import { keyVoiceOf, singingVoiceOf } from "./singingVoiceOf";
+import { keyVoiceOf, singingVoiceOf } from "@/shared/keys/singingVoiceOf";
 import { voiceQueries } from "./voiceQueries";
 
 export interface SingingVoiceState {

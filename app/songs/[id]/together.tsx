@@ -5,7 +5,7 @@ import { TogetherScreen } from "@/features/keys/together/TogetherScreen";
 import { SongState } from "@/features/songs/SongState";
 import { songQueries } from "@/features/songs/songQueries";
 import { readByHand } from "@/features/voice/byHand/byHand";
-import { keyVoiceOf } from "@/features/voice/singingVoiceOf";
+import { keyVoiceOf } from "@/shared/keys/singingVoiceOf";
 import { voiceQueries } from "@/features/voice/voiceQueries";
 import type { Song } from "@/shared/contract/song";
 

@@ -5,7 +5,7 @@ import { Screen } from "@/features/ui/Screen";
 import { Text } from "@/features/ui/Text";
 import { ByHandForm } from "./ByHandForm";
 import { chooseVoice, useChosenVoiceId } from "../chosenVoice";
-import { singingVoiceOf } from "../singingVoiceOf";
+import { singingVoiceOf } from "@/shared/keys/singingVoiceOf";
 import { pickVoice } from "../useSingingVoice";
 import { letGoOfByHandDraft } from "./useByHandDraft";
 import { newVoice, useSaveVoice, voiceQueries } from "../voiceQueries";

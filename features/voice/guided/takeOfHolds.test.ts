@@ -1,5 +1,5 @@
 import { take } from "@/shared/contract/take";
-import { inTune } from "../takeOfHeard";
+import { inTune } from "@/shared/voice/shownTake";
 import type { GuidedFindings, GuidedRun } from "./guidedSteps";
 import { takeOfHolds } from "./takeOfHolds";
 

@@ -3,7 +3,7 @@ import { Text } from "@/features/ui/Text";
 import type { Take } from "@/shared/contract/take";
 import { movingEnds, type MovedEnd } from "@/shared/voice/movingEnds";
 import { semitoneWords } from "../noteWords";
-import { shownTake } from "../singingVoiceOf";
+import { shownTake } from "@/shared/voice/shownTake";
 
 export interface MovingVoiceProps {
   /** of one voice */

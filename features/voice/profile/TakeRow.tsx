@@ -7,7 +7,7 @@ import { colors } from "@/features/ui/theme";
 import type { Take } from "@/shared/contract/take";
 import { AfterSinging } from "../sing/AfterSinging";
 import { bandWords, effortWords, warmedWords, whenWords } from "../noteWords";
-import { inTune } from "../takeOfHeard";
+import { inTune } from "@/shared/voice/shownTake";
 
 export interface TakeRowProps {
   take: Take;

@@ -1,6 +1,6 @@
 import { aTake } from "@/__tests__/client/belongings";
 import type { Take } from "@/shared/contract/take";
-import { profileOf } from "../singingVoiceOf";
+import { profileOf } from "@/shared/voice/shownTake";
 import { whyComfort, whyEnd, withoutTake } from "./whyEnd";
 
 const voiceId = "5c8d1c1e-8f55-4b7e-8d0a-6a6f4b1f2d22";

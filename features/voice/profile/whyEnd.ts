@@ -1,7 +1,7 @@
 import type { Take } from "@/shared/contract/take";
 import type { VoiceProfile } from "@/shared/voice/voiceProfile";
 import { noteWord, whenWords } from "../noteWords";
-import { profileOf, shownTake } from "../singingVoiceOf";
+import { profileOf, shownTake } from "@/shared/voice/shownTake";
 
 export type VoiceEnd = "low" | "high";
 

@@ -12,7 +12,7 @@ import { causeWords, isInterruption } from "./failureWords";
 import { NoteDots } from "./NoteDots";
 import { bandWords, certaintyWords } from "../noteWords";
 import type { HeardTake } from "../recorder/recorder";
-import { inTune } from "../takeOfHeard";
+import { inTune } from "@/shared/voice/shownTake";
 import { timeOnNotes } from "../timeOnNotes";
 import { VoiceLadder } from "../VoiceLadder";
 import { reachesFarther } from "../profile/VoicePicture";

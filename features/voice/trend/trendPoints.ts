@@ -1,6 +1,6 @@
 import type { Take } from "@/shared/contract/take";
+import { inTune } from "@/shared/voice/shownTake";
 import type { PitchBand } from "@/shared/voice/takeReport";
-import { inTune } from "../takeOfHeard";
 
 export type DayTime = "morning" | "afternoon" | "evening";
 

@@ -1,25 +1,19 @@
-import type { Take } from "@/shared/contract/take";
-import type { Voice } from "@/shared/contract/voice";
-import { keyVoiceOf, singingVoiceOf } from "./singingVoiceOf";
-import { pickVoice } from "./useSingingVoice";
+import type { KeptTake } from "../voice/shownTake";
+import { type KeptVoice, keyVoiceOf, singingVoiceOf } from "./singingVoiceOf";
 
-const voice: Voice = { id: "v1", name: "My voice", byHand: null, createdAt: "2026-11-01T10:00:00.000Z" };
-const take = (id: string, change: Partial<Take> = {}): Take => ({
+const voice: KeptVoice = { id: "v1", byHand: null };
+const take = (id: string, change: Partial<KeptTake> = {}): KeptTake => ({
   id,
   voiceId: "v1",
   kind: "phrase",
   shows: "both",
   sungAt: "2026-11-05T19:20:00.000Z",
-  warmedUp: null,
   effort: null,
-  durationS: 9,
   range: { lowMidi: 53, highMidi: 72 },
   comfort: { lowMidi: 55, highMidi: 69 },
   estimate: { lowMidi: 51, highMidi: 74 },
   tuningCents: 0,
   certainty: 0.7,
-  reasons: [],
-  notes: [],
   ...change,
 });
 
@@ -87,13 +81,4 @@ describe("the voice that keys are judged by", () => {
     expect(keyVoiceOf({ ...voice, byHand }, [phrase])).toEqual(byHand);
     expect(keyVoiceOf(voice, [])).toBeNull();
   });
-});
-
-it("picks the voice asked for, else the chosen one, else the first", () => {
-  const second = { ...voice, id: "v2" };
-  expect(pickVoice([voice, second], "v2", "v1")).toBe(second);
-  expect(pickVoice([voice, second], "gone", "v1")).toBeNull();
-  expect(pickVoice([voice, second], undefined, "v2")).toBe(second);
-  expect(pickVoice([voice, second], undefined, "gone")).toBe(voice);
-  expect(pickVoice([], undefined, null)).toBeNull();
 });

@@ -7,7 +7,7 @@ import { arrangementsRoutes } from "./arrangements/arrangements.router";
 import { adminRoutes } from "./admin/admin.router";
 import { accountRoutes } from "./auth/account.router";
 import { authRoutes } from "./auth/auth.router";
-import { authParts } from "./auth/authParts";
+import { type AuthSettings, authParts } from "./auth/authParts";
 import { emailRoutes } from "./auth/email.router";
 import { createGuard } from "./auth/guard";
 import { recoveryRoutes } from "./auth/recovery.router";
@@ -34,12 +34,13 @@ import { type ObjectStore, storageOrigin } from "./storage/objectStore.service";
 import { voicesRoutes } from "./voices/voices.router";
 import { playerWishesRoutes } from "./ways/playerWishes.router";
 
-type AppSettings = Pick<Env, "tokenSecret" | "publicOrigin" | "trustProxy" | "staticDir"> & {
-  /** where mails go that are really sent to nobody; shown at /dev/inbox */
-  fakeSmtp?: FakeSmtp | undefined;
-  /** where recordings are kept */
-  objects: ObjectStore;
-};
+type AppSettings = Pick<Env, "tokenSecret" | "publicOrigin" | "trustProxy" | "staticDir"> &
+  Pick<AuthSettings, "hashCost"> & {
+    /** where mails go that are really sent to nobody; shown at /dev/inbox */
+    fakeSmtp?: FakeSmtp | undefined;
+    /** where recordings are kept */
+    objects: ObjectStore;
+  };
 
 /** Puts the server together; the only place that knows all its parts. */
 export function createApp(dataSource: DataSource, logger: Logger, settings: AppSettings): { app: Express; api: Api } {

@@ -1,7 +1,6 @@
 import "reflect-metadata";
 import { createServer } from "node:http";
 import type { AddressInfo } from "node:net";
-import { preparePasswords } from "./auth/passwords";
 import { createApp } from "./createApp";
 import { createJobs } from "./createJobs";
 import { createDataSource } from "./database/dataSource";
@@ -26,7 +25,6 @@ async function main(): Promise<void> {
     throw new StartError(`The database does not answer or cannot be brought up to date: ${describe(error)}`);
   });
   const dataSource = await createDataSource(env.databaseUrl, (error) => logger.warn(error)).initialize();
-  await preparePasswords();
   if (env.demo) await loadDemoScenario(dataSource);
   const signIns = env.demo ? await demoSignIns(dataSource) : [];
 

@@ -3,16 +3,19 @@ import request from "supertest";
 import { cookieOf, password, Person, startTestServer, type TestServer } from "./testServer";
 
 let server: TestServer;
+/** Hashes with as much work as in earnest. */
+let earnest: TestServer;
 beforeAll(async () => {
   server = await startTestServer();
+  earnest = await startTestServer({ hashCost: undefined });
 });
 beforeEach(() => server.database.query("DELETE FROM tries"));
-afterAll(() => server.close());
+afterAll(() => Promise.all([server.close(), earnest.close()]));
 
-const post = (path: string, body: object) => request(server.app).post(`/api/auth/${path}`).send(body);
+const post = (path: string, body: object, to = server) => request(to.app).post(`/api/auth/${path}`).send(body);
 
 it("opens an account, says who is in, and keeps no readable password or token", async () => {
-  const response = await post("sign-up", { email: "Maren.Oake@orlow-quay.example", password }).expect(201);
+  const response = await post("sign-up", { email: "Maren.Oake@orlow-quay.example", password }, earnest).expect(201);
   expect(response.body).toEqual({
     accessToken: expect.stringMatching(/^[\w-]+\.[\w-]+\.[\w-]+$/),
     expiresInS: 600,
@@ -24,16 +27,16 @@ it("opens an account, says who is in, and keeps no readable password or token", 
       secondFactor: false,
     },
   });
-  const me = await request(server.app)
+  const me = await request(earnest.app)
     .get("/api/account")
     .set("Authorization", `Bearer ${response.body.accessToken}`)
     .expect(200);
   expect(me.body).toEqual(response.body.account);
 
-  const [user] = await server.database.query("SELECT password_hash FROM users");
+  const [user] = await earnest.database.query("SELECT password_hash FROM users");
   expect(user?.password_hash).toMatch(/^\$argon2id\$v=19\$m=19456,t=2,p=1\$/);
   const token = cookieOf(response).split("=")[1] ?? "";
-  const [stored] = await server.database.query(
+  const [stored] = await earnest.database.query(
     "SELECT encode(token_hash, 'escape') AS text, length(token_hash) AS bytes FROM refresh_tokens",
   );
   expect(stored?.bytes).toBe(32);
@@ -55,13 +58,12 @@ it("opens one account when the form is sent twice at once", async () => {
 });
 
 it("says the same of a wrong password and of an unknown address, after the same work", async () => {
-  const { email } = await Person.signUp(server.app);
+  const { email } = await Person.signUp(earnest.app);
   const verify = jest.spyOn(argon2, "verify");
-  const wrong = await post("sign-in", { email, password: "not the password" }).expect(401);
+  const wrong = await post("sign-in", { email, password: "not the password" }, earnest).expect(401);
   expect(wrong.body).toMatchObject({ code: "wrong-credentials" });
-  const unknown = await post("sign-in", { email: "nobody@orlow-quay.example", password: "not the password" }).expect(
-    401,
-  );
+  const nobody = { email: "nobody@orlow-quay.example", password: "not the password" };
+  const unknown = await post("sign-in", nobody, earnest).expect(401);
   expect(unknown.body).toEqual(wrong.body);
   const cost = /^\$argon2id\$v=19\$m=19456,t=2,p=1\$/;
   const work = [expect.stringMatching(cost), "not the password"];

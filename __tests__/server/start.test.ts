@@ -1,6 +1,7 @@
 import { type ChildProcess, spawn } from "node:child_process";
 import { once } from "node:events";
 import { Agent, get } from "node:http";
+import { type AddressInfo, createServer } from "node:net";
 import path from "node:path";
 import { createTestDatabase, type TestDatabase } from "./testDatabase";
 
@@ -42,59 +43,76 @@ async function ready({ child, said }: ReturnType<typeof start>): Promise<string>
   }
 }
 
-it.each(["SIGTERM", "SIGINT"] as const)(
-  "starts, serves, and ends cleanly on %s, even with a connection held open",
-  async (signal) => {
-    const server = start({ DATABASE_URL: database.url, PORT: "0" });
-    const address = await ready(server);
-    const agent = new Agent({ keepAlive: true });
-    const [status, body] = await new Promise<[number | undefined, string]>((resolve, reject) => {
-      get(`${address}/api/health`, { agent }, (response) => {
-        let text = "";
-        response.on("data", (chunk: Buffer) => (text += chunk.toString()));
-        response.on("end", () => resolve([response.statusCode, text]));
-      }).on("error", reject);
+async function freePort(): Promise<number> {
+  const server = createServer().listen(0, "127.0.0.1");
+  await once(server, "listening");
+  const { port } = server.address() as AddressInfo;
+  await new Promise((resolve) => server.close(resolve));
+  return port;
+}
+
+type Started = ReturnType<typeof start>;
+
+/** Asks for the health over a connection that stays open. */
+function healthOver(agent: Agent, address: string): Promise<[number | undefined, string]> {
+  return new Promise((resolve, reject) => {
+    get(`${address}/api/health`, { agent }, (response) => {
+      let text = "";
+      response.on("data", (chunk: Buffer) => (text += chunk.toString()));
+      response.on("end", () => resolve([response.statusCode, text]));
+    }).on("error", reject);
+  });
+}
+
+describe("two servers on one empty database, with the demonstration and in production", () => {
+  let development: Started;
+  let production: Started;
+  beforeAll(async () => {
+    development = start({ DATABASE_URL: database.url, PORT: "0" });
+    await ready(development);
+    const port = String(await freePort());
+    production = start({
+      DATABASE_URL: database.url,
+      PORT: port,
+      NODE_ENV: "production",
+      TOKEN_SECRET: "x".repeat(32),
+      PUBLIC_URL: `http://127.0.0.1:${port}`,
+      SMTP_URL: "smtp://127.0.0.1:1",
+      S3_ENDPOINT: "http://127.0.0.1:1",
+      S3_BUCKET: "takes",
+      S3_ACCESS_KEY_ID: "key",
+      S3_SECRET_ACCESS_KEY: "secret",
     });
-    expect([status, JSON.parse(body)]).toEqual([200, { status: "ok", database: "up" }]);
-    server.child.kill(signal);
-    // The start script passes on what the terminal has sent already.
-    server.child.kill("SIGTERM");
-    expect(await server.ended).toEqual({ code: 0, signal: null });
-    expect(server.said.err).toBe("");
-    agent.destroy();
-  },
-);
+    await ready(production);
+  });
 
-it("prints how to get into the demonstration, and only where there is one", async () => {
-  const shown = start({ DATABASE_URL: database.url, PORT: "0" });
-  const production = {
-    NODE_ENV: "production",
-    TOKEN_SECRET: "x".repeat(32),
-    PUBLIC_URL: "http://127.0.0.1:1",
-    SMTP_URL: "smtp://127.0.0.1:1",
-    S3_ENDPOINT: "http://127.0.0.1:1",
-    S3_BUCKET: "takes",
-    S3_ACCESS_KEY_ID: "key",
-    S3_SECRET_ACCESS_KEY: "secret",
-  };
-  const hidden = start({ DATABASE_URL: database.url, PORT: "0", ...production });
-  for (const server of [shown, hidden]) {
-    await ready(server);
-    server.child.kill("SIGTERM");
-    await server.ended;
-  }
-  expect(shown.said.out).toMatch(/Maren Oake \(singer\): maren@orlow-quay\.example, password "[^"]{12,}"\n/);
-  expect(hidden.said.out).not.toContain("maren");
-});
+  it("print how to get into the demonstration, and only where there is one", () => {
+    expect(development.said.out).toMatch(/Maren Oake \(singer\): maren@orlow-quay\.example, password "[^"]{12,}"\n/);
+    expect(production.said.out).not.toContain("maren");
+  });
 
-it("says that its port is in use", async () => {
-  const first = start({ DATABASE_URL: database.url, PORT: "0" });
-  const { port } = new URL(await ready(first));
-  const second = start({ DATABASE_URL: database.url, PORT: port });
-  expect(await second.ended).toEqual({ code: 1, signal: null });
-  expect(second.said.err).toBe(`Port ${port} is in use. Choose another one with PORT.\n`);
-  first.child.kill("SIGTERM");
-  await first.ended;
+  it("say that their port is in use", async () => {
+    const { port } = new URL(await ready(development));
+    const second = start({ DATABASE_URL: database.url, PORT: port });
+    expect(await second.ended).toEqual({ code: 1, signal: null });
+    expect(second.said.err).toBe(`Port ${port} is in use. Choose another one with PORT.\n`);
+  });
+
+  it.each(["SIGTERM", "SIGINT"] as const)(
+    "serve, and end cleanly on %s, even with a connection held open",
+    async (signal) => {
+      const server = signal === "SIGTERM" ? development : production;
+      const agent = new Agent({ keepAlive: true });
+      const [status, body] = await healthOver(agent, await ready(server));
+      expect([status, JSON.parse(body)]).toEqual([200, { status: "ok", database: "up" }]);
+      server.child.kill(signal);
+      // The start script passes on what the terminal has sent already.
+      server.child.kill("SIGTERM");
+      expect(await server.ended).toEqual({ code: 0, signal: null });
+      expect(server.said.err).toBe("");
+      agent.destroy();
+    },
+  );
 });
 
 it("says in plain lines, all at once, what is wrong with its environment", async () => {

@@ -107,13 +107,13 @@ test("samples that end in the middle of one, or after one, are read as far as th
   for (const { reasons } of lines) expect(reasons[0]).toMatch(/^The file is cut off/);
 });
 
-test("three minutes are heard at more than ten times the speed they were sung at", async () => {
+test("a minute and a half is heard at more than ten times the speed it was sung at", async () => {
   const { pcm } = singPhrase({
     notes: [50, 54, 57, 62, 54, 50].map((midi) => ({ midi, durationS: 0.6 })),
     seed: 3,
     sampleRate: 8000,
   });
-  const long = new Float32Array(8000 * 180);
+  const long = new Float32Array(8000 * 90);
   for (let at = 0; at + pcm.length <= long.length; at += pcm.length) long.set(pcm, at);
   const file = join(folder, "long.wav");
   writeFileSync(file, wavBytes(long, 8000));
@@ -121,5 +121,5 @@ test("three minutes are heard at more than ten times the speed they were sung at
   const [line] = (await linesOf(takeVerb, [file])) as { verdict: string; lowMidi: number; highMidi: number }[];
   const { user, system } = process.cpuUsage(before);
   expect([line!.verdict, Math.round(line!.lowMidi), Math.round(line!.highMidi)]).toEqual(["heard", 50, 62]);
-  expect((user + system) / 1e6).toBeLessThan(18);
+  expect((user + system) / 1e6).toBeLessThan(9);
 }, 120_000);

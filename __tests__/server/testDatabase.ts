@@ -13,6 +13,7 @@ const templateLock = 8_400_002;
 
 export interface TestDatabase {
   url: string;
+  /** on one connection, which is kept until the end */
   query: (sql: string, values?: unknown[]) => Promise<Record<string, unknown>[]>;
   drop: () => Promise<void>;
 }
@@ -26,14 +27,17 @@ export async function createTestDatabase({ migrated = true } = {}): Promise<Test
     await client.query(`CREATE DATABASE ${name} TEMPLATE ${template} STRATEGY file_copy`);
   });
   const url = databaseUrl(admin, name);
+  let own: Promise<Client> | undefined;
   return {
     url,
-    query: (sql, values) =>
-      withClient(url, async (client) => (await client.query<Record<string, unknown>>(sql, values)).rows),
-    drop: () =>
-      withClient(admin, async (client) => {
-        await client.query(`DROP DATABASE ${name} WITH (FORCE)`);
-      }),
+    query: async (sql, values) => {
+      own ??= connect(url);
+      return (await (await own).query<Record<string, unknown>>(sql, values)).rows;
+    },
+    drop: async () => {
+      await (await own)?.end();
+      await withClient(admin, (client) => client.query(`DROP DATABASE ${name} WITH (FORCE)`));
+    },
   };
 }
 
@@ -76,10 +80,15 @@ function databaseUrl(admin: string, name: string): string {
   return url.href;
 }
 
-async function withClient<Result>(url: string, work: (client: Client) => Promise<Result>): Promise<Result> {
+async function connect(url: string): Promise<Client> {
   const client = new Client({ connectionString: url });
   client.on("error", () => undefined);
   await client.connect();
+  return client;
+}
+
+async function withClient<Result>(url: string, work: (client: Client) => Promise<Result>): Promise<Result> {
+  const client = await connect(url);
   try {
     return await work(client);
   } finally {

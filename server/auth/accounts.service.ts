@@ -3,7 +3,7 @@ import type { Account, PersonFacts, Role } from "../../shared/contract/account";
 import { HttpProblem, noSession } from "../http/httpProblem";
 import { enqueueMail } from "../mail/mail.service";
 import type { LinkTokensService } from "../mail/linkTokens.service";
-import { hashPassword, passwordMatches } from "./passwords";
+import type { Passwords } from "./passwords";
 
 /** What the server knows of a person beyond what it tells them. */
 interface KnownPerson {
@@ -32,6 +32,7 @@ export class AccountsService {
   constructor(
     private readonly dataSource: DataSource,
     private readonly tokens: LinkTokensService,
+    private readonly passwords: Passwords,
   ) {}
 
   /**
@@ -40,7 +41,7 @@ export class AccountsService {
    * the right password of an account that exists gets that one.
    */
   async open(email: string, password: string): Promise<{ person: KnownPerson; isNew: boolean }> {
-    const passwordHash = await hashPassword(password);
+    const passwordHash = await this.passwords.hash(password);
     return this.dataSource.transaction(async (manager) => {
       // The same form sent twice at once opens one account.
       await manager.query("SELECT pg_advisory_xact_lock(8400003, hashtext(lower($1)))", [email]);
@@ -82,7 +83,7 @@ export class AccountsService {
     let found: KnownPerson | null = null;
     for (let k = 0; k < tried; k++) {
       const person = people[k];
-      if ((await passwordMatches(person?.passwordHash ?? null, password)) && person) found ??= person;
+      if ((await this.passwords.matches(person?.passwordHash ?? null, password)) && person) found ??= person;
     }
     return found;
   }
@@ -127,14 +128,17 @@ export class AccountsService {
   /** Refuses a wrong password of somebody who is signed in. */
   async check(id: string, password: string): Promise<KnownPerson> {
     const person = await this.person(id);
-    if (await passwordMatches(person.passwordHash, password)) return person;
+    if (await this.passwords.matches(person.passwordHash, password)) return person;
     throw new HttpProblem(403, "wrong-password", "This is not your password.", [
       { path: "password", message: "This is not your password." },
     ]);
   }
 
   async setPassword(connection: Connection, id: string, password: string): Promise<void> {
-    await connection.query("UPDATE users SET password_hash = $2 WHERE id = $1", [id, await hashPassword(password)]);
+    await connection.query("UPDATE users SET password_hash = $2 WHERE id = $1", [
+      id,
+      await this.passwords.hash(password),
+    ]);
   }
 
   async facts(id: string): Promise<PersonFacts> {

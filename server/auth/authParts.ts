@@ -5,6 +5,7 @@ import { LinkTokensService } from "../mail/linkTokens.service";
 import { randomUUID } from "node:crypto";
 import { AccountsService } from "./accounts.service";
 import { deviceWords } from "./deviceWords";
+import { type HashCost, Passwords } from "./passwords";
 import { SecondFactorService } from "./secondFactor/secondFactor.service";
 import { SecurityLogService } from "./securityLog.service";
 import { SessionsService } from "./sessions.service";
@@ -13,6 +14,8 @@ import { TryLimits } from "./tryLimits";
 export interface AuthSettings {
   tokenSecret: string;
   publicOrigin: string | null;
+  /** for tests, which hash often; no variable of the environment leads here */
+  hashCost?: HashCost | undefined;
 }
 
 /** What the routes of accounts work with. */
@@ -28,13 +31,14 @@ export interface AuthParts {
 }
 
 export function authParts(dataSource: DataSource, settings: AuthSettings): AuthParts {
-  const { tokenSecret } = settings;
+  const { tokenSecret, hashCost } = settings;
   const tokens = new LinkTokensService(tokenSecret);
+  const passwords = new Passwords(hashCost);
   return {
     dataSource,
     settings,
     tokens,
-    accounts: new AccountsService(dataSource, tokens),
+    accounts: new AccountsService(dataSource, tokens, passwords),
     sessions: new SessionsService(dataSource),
     secondFactors: new SecondFactorService(dataSource, tokenSecret),
     limits: new TryLimits(dataSource),

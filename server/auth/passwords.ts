@@ -1,29 +1,33 @@
 import { argon2id, hash, verify } from "argon2";
 
+/** How much work a hash is: KiB of memory, and passes over them. */
+export interface HashCost {
+  memoryCost: number;
+  timeCost: number;
+}
+
 /** OWASP's Password Storage Cheat Sheet: argon2id with 19 MiB, two passes, one lane. */
-const cost = { type: argon2id, memoryCost: 19 * 1024, timeCost: 2, parallelism: 1 };
+const ownCost: HashCost = { memoryCost: 19 * 1024, timeCost: 2 };
 
 /** The same password typed on different systems may arrive in different Unicode forms (RFC 8265). */
 const canonical = (password: string) => password.normalize("NFKC");
 
-export function hashPassword(password: string): Promise<string> {
-  return hash(canonical(password), cost);
-}
+/** Hashes passwords and compares them. No setting of a server changes the cost; tests give a small one. */
+export class Passwords {
+  /** What the password of an unknown address is compared with; begun here, so that no request waits for it. */
+  private readonly unknownAddress: Promise<string>;
 
-export async function passwordMatches(storedHash: string | null, password: string): Promise<boolean> {
-  // An unknown address must take as long as a wrong password, or the time would tell who has an account.
-  const matches = await verify(storedHash ?? (await unknownAddress()), canonical(password));
-  return matches && storedHash !== null;
-}
+  constructor(private readonly cost = ownCost) {
+    this.unknownAddress = this.hash("no account has this password");
+  }
 
-let placeholder: Promise<string> | undefined;
+  hash(password: string): Promise<string> {
+    return hash(canonical(password), { ...this.cost, type: argon2id, parallelism: 1 });
+  }
 
-function unknownAddress(): Promise<string> {
-  placeholder ??= hashPassword("no account has this password");
-  return placeholder;
-}
-
-/** Makes the placeholder before the first request needs it. */
-export async function preparePasswords(): Promise<void> {
-  await unknownAddress();
+  async matches(storedHash: string | null, password: string): Promise<boolean> {
+    // An unknown address must take as long as a wrong password, or the time would tell who has an account.
+    const matches = await verify(storedHash ?? (await this.unknownAddress), canonical(password));
+    return matches && storedHash !== null;
+  }
 }

@@ -12,7 +12,7 @@ import { demoSongs } from "../../shared/songs/demoSongs";
 import { readMelodyFile } from "../../shared/songs/melodyFile";
 import { mergeTakes } from "../../shared/voice/voiceProfile";
 import { findWays } from "../../shared/ways/findWays";
-import { hashPassword } from "../auth/passwords";
+import { Passwords } from "../auth/passwords";
 import { UserEntity } from "../auth/user.entity";
 import { InstrumentEntity } from "../instruments/instrument.entity";
 import { DecisionEntity } from "../keys/decision.entity";
@@ -34,7 +34,7 @@ export interface DemoSignIn {
 /** Loads the evening class, all of it or nothing, if nobody has an account yet. */
 export async function loadDemoScenario(dataSource: DataSource): Promise<void> {
   if (await dataSource.createQueryBuilder(UserEntity, "user").getExists()) return;
-  const passwordHash = await hashPassword(demoPassword);
+  const passwordHash = await new Passwords().hash(demoPassword);
   await dataSource.transaction(async (manager) => {
     // Another server may be starting on the same empty database.
     await manager.query("LOCK TABLE users IN SHARE ROW EXCLUSIVE MODE");

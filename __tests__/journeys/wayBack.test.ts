@@ -42,7 +42,7 @@ test.each(["phone", "wide"] as const)(
     await page.getByTestId("link-sent").waitFor();
     await page.goto(`/account/reset#${await tokenFor(page, email, "/account/reset")}`);
     await page.getByTestId("password").fill(second);
-    await page.waitForFunction(() => window.location.hash === "");
+    await page.waitForURL(/\/account\/reset$/);
     await page.getByTestId("send").click();
     await page.getByTestId("reset-done").waitFor();
 

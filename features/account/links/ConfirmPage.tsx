@@ -2,6 +2,7 @@ import { useCallback, useEffect, useRef, useState } from "react";
 import { View } from "react-native";
 import { ApiError } from "@/features/api/apiError";
 import { http } from "@/features/api/httpClient";
+import { useMailedToken } from "@/features/api/useMailedToken";
 import { session } from "@/features/api/session";
 import { useSession } from "@/features/api/SessionProvider";
 import { EmptyState } from "@/features/ui/EmptyState";
@@ -9,25 +10,26 @@ import { ErrorState } from "@/features/ui/ErrorState";
 import { LinkButton } from "@/features/ui/LinkButton";
 import { Skeleton } from "@/features/ui/Skeleton";
 import type { Account } from "@/shared/contract/account";
-import { keptToken, tokenInAddress } from "./linkToken";
-import { useAddressCleared } from "./useAddressCleared";
+import { keptToken } from "./keptToken";
 
 type Outcome = { email: string } | ApiError | null;
 
 /** The token of the address, or the one that was kept while its owner signed in. */
-function takeToken(): string {
-  const token = tokenInAddress();
-  if (token !== "") keptToken.keep(token);
-  return token === "" ? keptToken.read() : token;
+function useTokenOverSignIn(): string {
+  const mailed = useMailedToken();
+  const [token] = useState(() => {
+    if (mailed !== "") keptToken.keep(mailed);
+    return mailed || keptToken.read();
+  });
+  return token;
 }
 
 /** Shows that an address is one's own, by the link from the mail; only for whoever is signed in. */
 export function ConfirmPage() {
   const { status } = useSession();
-  const [token] = useState(takeToken);
+  const token = useTokenOverSignIn();
   const [outcome, setOutcome] = useState<Outcome>(null);
   const begun = useRef(false);
-  useAddressCleared();
 
   const confirm = useCallback(async () => {
     setOutcome(null);

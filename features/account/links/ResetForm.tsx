@@ -1,6 +1,7 @@
 import { useState } from "react";
 import { ApiError } from "@/features/api/apiError";
 import { http } from "@/features/api/httpClient";
+import { useMailedToken } from "@/features/api/useMailedToken";
 import { session } from "@/features/api/session";
 import { EmptyState } from "@/features/ui/EmptyState";
 import { Form } from "@/features/ui/Form";
@@ -9,15 +10,12 @@ import { checkNewPassword } from "../forms/checkPassword";
 import { FormEnd } from "@/features/ui/form/FormEnd";
 import { PasswordField } from "../forms/PasswordField";
 import { useServerForm } from "@/features/api/useServerForm";
-import { tokenInAddress } from "./linkToken";
-import { useAddressCleared } from "./useAddressCleared";
 import { NarrowCard } from "./NarrowCard";
 
 /** A new password, by the link from the mail. */
 export function ResetForm() {
-  const [token] = useState(tokenInAddress);
+  const token = useMailedToken();
   const [state, setState] = useState<"open" | "done" | "not-valid">(token === "" ? "not-valid" : "open");
-  useAddressCleared();
   const { form, end, submit } = useServerForm({ password: "" }, async ({ password }) => {
     try {
       await http.open("/auth/reset", { token, password });

@@ -1,7 +1,7 @@
 import { useMutation } from "@tanstack/react-query";
-import { useState } from "react";
 import { ApiError } from "@/features/api/apiError";
 import { http } from "@/features/api/httpClient";
+import { useMailedToken } from "@/features/api/useMailedToken";
 import { Button } from "@/features/ui/Button";
 import { EmptyState } from "@/features/ui/EmptyState";
 import { LinkButton } from "@/features/ui/LinkButton";
@@ -9,14 +9,11 @@ import { Notice } from "@/features/ui/Notice";
 import { Text } from "@/features/ui/Text";
 import type { Unsubscribed } from "@/shared/contract/mail";
 import { mailWords } from "../mail/mailWords";
-import { tokenInAddress } from "./linkToken";
-import { useAddressCleared } from "./useAddressCleared";
 import { NarrowCard } from "./NarrowCard";
 
 /** Ends one kind of mail, without signing in. */
 export function UnsubscribePage() {
-  const [token] = useState(tokenInAddress);
-  useAddressCleared();
+  const token = useMailedToken();
   const end = useMutation({
     mutationFn: () => http.open<Unsubscribed>(`/mail/unsubscribe?token=${encodeURIComponent(token)}`),
   });

@@ -1,12 +1,6 @@
 const key = "larkspan.confirm-link";
 let spare: string | null = null;
 
-/** The token behind the # of a link from a mail; "" where there is none. */
-export function tokenInAddress(): string {
-  const token = window.location.hash.slice(1);
-  return /^[\w-]{1,200}$/.test(token) ? token : "";
-}
-
 /** Keeps the token of a link over a sign-in, in this tab only. */
 export const keptToken = {
   read(): string {

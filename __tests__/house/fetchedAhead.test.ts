@@ -2,7 +2,7 @@ import { readdirSync, readFileSync } from "node:fs";
 import { join } from "node:path";
 
 /** Pages that do nothing but speak with the server: without a connection there is nothing to open. */
-const onlyOnline = /^\.\/(admin\/|account\/(?!index|sign-in|sign-up))/;
+const onlyOnline = /^\.\/(admin\/|studio\/|invite|guardian|account\/(?!index|sign-in|sign-up))/;
 
 const app = join(__dirname, "..", "..", "app");
 

@@ -12,13 +12,16 @@ import type { Account } from "@/shared/contract/account";
 export interface SignedInProps {
   /** where one stands, to come back after signing in */
   here: string;
+  /** the whole width of the page instead of a column */
+  wide?: boolean;
   children: (account: Account) => ReactNode;
 }
 
 /** A page of the account: for whoever is signed in; anybody else is asked to. */
-export function SignedIn({ here, children }: SignedInProps) {
+export function SignedIn({ here, wide = false, children }: SignedInProps) {
   const { account, status, problem } = useSession();
-  if (account) return <View style={{ width: "100%", maxWidth: 560, gap: 16 }}>{children(account)}</View>;
+  if (account)
+    return <View style={{ width: "100%", ...(wide ? null : { maxWidth: 560 }), gap: 16 }}>{children(account)}</View>;
   if (status === "visitor")
     return (
       <EmptyState

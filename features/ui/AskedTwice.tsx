@@ -13,6 +13,9 @@ export interface AskedTwiceProps {
   text: string;
   /** before the reason why it did not work: "It is not deleted." */
   failed: string;
+  /** "Delete it" and "Keep it" unless something else is asked */
+  confirmLabel?: string;
+  keepLabel?: string;
   onRemove: () => void;
   busy: boolean;
   error: Error | null;
@@ -21,7 +24,18 @@ export interface AskedTwiceProps {
 }
 
 /** Deletes only after it was asked twice. */
-export function AskedTwice({ label, question, text, failed, onRemove, busy, error, testID }: AskedTwiceProps) {
+export function AskedTwice({
+  label,
+  question,
+  text,
+  failed,
+  confirmLabel = "Delete it",
+  keepLabel = "Keep it",
+  onRemove,
+  busy,
+  error,
+  testID,
+}: AskedTwiceProps) {
   const [asked, setAsked] = useState(false);
   const group = useRef<HTMLDivElement>(null);
   const opener = useRef<HTMLDivElement>(null);
@@ -51,8 +65,8 @@ export function AskedTwice({ label, question, text, failed, onRemove, busy, erro
           </Text>
         )}
         <View style={{ flexDirection: "row", flexWrap: "wrap", gap: 8, marginTop: 8 }}>
-          <Button small label="Delete it" busy={busy} onPress={onRemove} testID="remove-confirmed" />
-          <Button kind="secondary" small label="Keep it" onPress={keep} />
+          <Button small label={confirmLabel} busy={busy} onPress={onRemove} testID="remove-confirmed" />
+          <Button kind="secondary" small label={keepLabel} onPress={keep} />
         </View>
       </Notice>
     </div>

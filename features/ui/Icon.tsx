@@ -28,6 +28,10 @@ const drawings = {
     ],
     circles: [[10.2, 13.8, 1.4]],
   },
+  studio: {
+    paths: ["M3.5 11 12 4l8.5 7", "M6 9.5V20h12V9.5", "M8.8 20a3.2 3.2 0 0 1 6.4 0"],
+    circles: [[12, 12.7, 1.9]],
+  },
   person: { circles: [[12, 9, 3.6]], paths: ["M5 20a7 7 0 0 1 14 0"] },
   mic: { rect: { x: 9, y: 3, width: 6, height: 11, rx: 3 }, paths: ["M5.5 11.5a6.5 6.5 0 0 0 13 0M12 18v3"] },
   stop: { rect: { x: 5, y: 5, width: 14, height: 14, rx: 3 }, filled: true },

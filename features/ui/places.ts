@@ -14,4 +14,5 @@ export const places: readonly Place[] = [
   { href: "/voice", label: "Voice", icon: "voice", within: /^\/($|voice)/ },
   { href: "/songs", label: "Songs", icon: "songs", within: /^\/songs/ },
   { href: "/instruments", label: "Instruments", icon: "instruments", within: /^\/instruments/ },
+  { href: "/studio" as Href, label: "Studio", icon: "studio", within: /^\/(studio|invite)/ },
 ];

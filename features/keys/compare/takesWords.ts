@@ -1,7 +1,7 @@
 import type { Try } from "@/shared/contract/try";
 import { glyphs, noteName } from "@/shared/music/pitch";
 import { sameKey } from "../sameKey";
-import { effortWords } from "../tryout/report/effortWords";
+import { effortWords } from "@/shared/voice/effortWords";
 
 const percentOf = (share: number) => `${Math.round(100 * share)} %`;
 

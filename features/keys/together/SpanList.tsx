@@ -7,7 +7,7 @@ import { spellingIn } from "../keyRows";
 import type { GroupKey } from "./groupKey";
 import { octaveNote } from "./groupWords";
 import { groupScale } from "./groupScale";
-import { SpanScale } from "./SpanScale";
+import { SpanScale } from "@/features/span/SpanScale";
 
 const tones = { comfort: "soft", reach: "honey", beyond: "brick" } as const;
 

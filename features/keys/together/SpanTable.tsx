@@ -8,7 +8,7 @@ import { spellingIn } from "../keyRows";
 import type { GroupKey } from "./groupKey";
 import { octaveNote } from "./groupWords";
 import { groupScale } from "./groupScale";
-import { SpanScale } from "./SpanScale";
+import { SpanScale } from "@/features/span/SpanScale";
 
 const widths = { name: 140, score: 60, words: 270 } as const;
 const rowHeight = 51;

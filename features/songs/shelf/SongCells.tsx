@@ -10,7 +10,7 @@ import { RowChoice, RowMenuButton } from "./RowTools";
 import { playedWords, shownKey, spanWords, sungSpan } from "./shelfRow";
 import { shelfScale } from "./shelfScale";
 import type { SongRowsProps } from "./SongRows";
-import { SpanBar } from "./SpanBar";
+import { SpanBar } from "@/features/span/SpanBar";
 
 export interface SongCellsProps extends Pick<SongRowsProps, "voice" | "mineOf" | "fitOf" | "actions"> {
   song: SongListing;

@@ -11,9 +11,9 @@ import type { SongListing } from "@/shared/contract/songListing";
 import type { SingingVoice } from "@/shared/keys/keyScore";
 import { RowChoice, RowMenuButton, type RowActions } from "./RowTools";
 import { listingWords, playedWords, shownKey, spanWords, sungSpan, type ShelfKey } from "./shelfRow";
-import { SpanBar } from "./SpanBar";
+import { SpanBar } from "@/features/span/SpanBar";
 import { shelfScale } from "./shelfScale";
-import { useShownRows } from "./useShownRows";
+import { useShownRows } from "@/features/ui/useShownRows";
 
 export interface SongRowsProps {
   songs: readonly SongListing[];

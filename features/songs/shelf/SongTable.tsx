@@ -8,7 +8,7 @@ import { shelfScale } from "./shelfScale";
 import type { ShelfSort } from "./shelfView";
 import { SongCells } from "./SongCells";
 import type { SongRowsProps } from "./SongRows";
-import { useShownRows } from "./useShownRows";
+import { useShownRows } from "@/features/ui/useShownRows";
 
 export interface SongTableProps extends SongRowsProps {
   sort: ShelfSort;

@@ -1,3 +1,4 @@
+import { sungIn, type SungSpan } from "@/features/span/sungSpan";
 import type { SongListing } from "@/shared/contract/songListing";
 import type { SingingVoice } from "@/shared/keys/keyScore";
 import { type KeyName, tonicPitchClass } from "@/shared/music/keyName";
@@ -15,16 +16,6 @@ export interface ShelfKey {
   elsewhere: boolean;
 }
 
-/** Lowest and highest note as they are sung, and where they leave the voice. */
-export interface SungSpan {
-  low: number;
-  high: number;
-  below: boolean;
-  above: boolean;
-  /** both ends lie in the comfort band */
-  comfortable: boolean;
-}
-
 /** The key a list shows first: the one decided, else the written one, else the tune's home note. */
 export function shownKey(song: SongListing, mine: ShelfKey | null): KeyName | null {
   if (mine) return mine.key;
@@ -37,14 +28,7 @@ export function sungSpan(song: SongListing, mine: ShelfKey | null, voice: Singin
   const shift = mine && !mine.elsewhere ? mine.shift : 0;
   const low = Math.round(song.span.lowMidi) + shift;
   const high = Math.round(song.span.highMidi) + shift;
-  const { range, comfort } = voice;
-  return {
-    low,
-    high,
-    below: low < Math.round(range.lowMidi),
-    above: high > Math.round(range.highMidi),
-    comfortable: low >= Math.round(comfort.lowMidi) && high <= Math.round(comfort.highMidi),
-  };
+  return sungIn(low, high, voice);
 }
 
 /** The picture in words. */

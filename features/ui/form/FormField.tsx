@@ -3,7 +3,7 @@ import { Field, type FieldProps } from "../Field";
 
 export interface FormFieldProps<Values extends FieldValues> extends Pick<
   FieldProps,
-  "label" | "hint" | "autoComplete" | "inputMode" | "testID"
+  "label" | "hint" | "autoComplete" | "inputMode" | "multiline" | "rows" | "testID"
 > {
   form: UseFormReturn<Values>;
   name: Path<Values>;

@@ -1,6 +1,6 @@
 import { fireEvent, render, screen, within } from "@testing-library/react";
 import { aSong, aTry } from "@/__tests__/client/belongings";
-import { effortWords } from "../report/effortWords";
+import { effortWords } from "@/shared/voice/effortWords";
 import { rankMoves } from "./rankMoves";
 import { SideBySide } from "./SideBySide";
 import { sittingOf } from "./sitting";

@@ -6,7 +6,7 @@ import { Text } from "@/features/ui/Text";
 import { colors } from "@/features/ui/theme";
 import type { Song } from "@/shared/contract/song";
 import type { KeyRow } from "../../keyRows";
-import { effortWords } from "../report/effortWords";
+import { effortWords } from "@/shared/voice/effortWords";
 import type { KnownTry } from "../tryQueries";
 import { measureWords, wholeMeasures } from "../report/measureWords";
 import { spellingIn } from "../../keyRows";

@@ -5,7 +5,7 @@ import { Notice } from "@/features/ui/Notice";
 import { Text } from "@/features/ui/Text";
 import { colors } from "@/features/ui/theme";
 import { glyphs } from "@/shared/music/pitch";
-import { effortWords } from "../report/effortWords";
+import { effortWords } from "@/shared/voice/effortWords";
 import { type KnownTry, useRemoveTry } from "../tryQueries";
 
 export interface TryListProps {

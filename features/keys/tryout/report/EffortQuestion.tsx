@@ -1,7 +1,7 @@
 import { View } from "react-native";
 import { Segmented } from "@/features/ui/Segmented";
 import { Text } from "@/features/ui/Text";
-import { effortWords } from "./effortWords";
+import { effortWords } from "@/shared/voice/effortWords";
 
 type Effort = "1" | "2" | "3" | "4" | "5" | "unsaid";
 const options = (["1", "2", "3", "4", "5"] as const).map((value) => ({ value, label: value }));

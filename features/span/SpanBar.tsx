@@ -1,10 +1,12 @@
 import Svg, { ClipPath, Defs, G, Line, Path, Rect } from "react-native-svg";
-import { Hatch, useDrawingId } from "@/features/span/Hatch";
-import { stripX } from "@/features/span/VoiceStrip";
-import type { Scale } from "@/features/span/ladderGeometry";
+import { Hatch, useDrawingId } from "./Hatch";
+import { stripX } from "./VoiceStrip";
+import type { Scale } from "./ladderGeometry";
 import { colors, mixtures } from "@/features/ui/theme";
 import type { SingingVoice } from "@/shared/keys/keyScore";
-import type { SungSpan } from "./shelfRow";
+import { glyphs, noteName } from "@/shared/music/pitch";
+import type { SungSpan } from "./sungSpan";
+import { SvgLabel } from "@/features/ui/SvgLabel";
 
 export interface SpanBarProps {
   /** on whole semitones */
@@ -15,28 +17,42 @@ export interface SpanBarProps {
   scale: Scale;
   width: number;
   words: string;
+  /** in a list of voices: a row of 40 with the names of both ends, and F and A dotted between the Cs */
+  tall?: boolean;
 }
 
-const height = 26;
-const top = 6;
-const thick = 14;
+const low = { height: 26, top: 6, thick: 14 } as const;
+const high = { height: 40, top: 12, thick: 16 } as const;
 
 /** The voice lying down, comfort solid and reach hatched, and the song's span as a line through it. */
-export function SpanBar({ voice, span, scale, width, words }: SpanBarProps) {
+export function SpanBar({ voice, span, scale, width, words, tall = false }: SpanBarProps) {
   const id = useDrawingId();
+  const { height, top, thick } = tall ? high : low;
   const half = width / (scale.high - scale.low + 1) / 2;
   const x = (midi: number) => Math.min(width - 8, Math.max(8, stripX(midi, scale, width)));
   const [left, right] = [x(voice.range.lowMidi) - half, x(voice.range.highMidi) + half];
   const [softLeft, softRight] = [x(voice.comfort.lowMidi) - half, x(voice.comfort.highMidi) + half];
   const middle = top + thick / 2;
-  const octaves = [...Array(scale.high - scale.low + 1).keys()]
-    .map((index) => scale.low + index)
-    .filter((midi) => midi % 12 === 0);
+  const semitones = [...Array(scale.high - scale.low + 1).keys()].map((index) => scale.low + index);
+  const octaves = semitones.filter((midi) => midi % 12 === 0);
+  const between = tall ? semitones.filter((midi) => midi % 12 === 5 || midi % 12 === 9) : [];
   return (
     <Svg width={width} height={height} viewBox={`0 0 ${width} ${height}`} role="img" aria-label={words}>
       <Hatch id={`${id}s`} pitch={4.5} line={1.2} />
       {octaves.map((midi) => (
         <Line key={midi} x1={x(midi)} x2={x(midi)} y1={0} y2={height} stroke={mixtures.rungC} strokeWidth={1} />
+      ))}
+      {between.map((midi) => (
+        <Line
+          key={midi}
+          x1={x(midi)}
+          x2={x(midi)}
+          y1={0}
+          y2={height}
+          stroke={colors.line}
+          strokeWidth={1}
+          strokeDasharray="1 4"
+        />
       ))}
       <Defs>
         <ClipPath id={`${id}c`}>
@@ -57,6 +73,16 @@ export function SpanBar({ voice, span, scale, width, words }: SpanBarProps) {
         stroke={colors.honey}
         strokeWidth={1}
       />
+      {tall && (
+        <>
+          <SvgLabel x={left - 6} y={middle + 4} size={11} family="mono" anchor="end" halo>
+            {glyphs(noteName(voice.range.lowMidi))}
+          </SvgLabel>
+          <SvgLabel x={right + 6} y={middle + 4} size={11} family="mono" halo>
+            {glyphs(noteName(voice.range.highMidi))}
+          </SvgLabel>
+        </>
+      )}
       {span && <SungLine span={span} x={x} middle={middle} left={left} right={right} soft={[softLeft, softRight]} />}
     </Svg>
   );

@@ -1,0 +1,22 @@
+import { useLocalSearchParams } from "expo-router";
+import { SignedIn } from "@/features/account/SignedIn";
+import { GroupsScreen } from "@/features/studio/groups/GroupsScreen";
+import { StudioPage } from "@/features/studio/StudioPage";
+
+export default function GroupsRoute() {
+  const { id } = useLocalSearchParams<{ id: string }>();
+  return (
+    <StudioPage
+      id={id}
+      wide
+      title="Groups"
+      door={(inside) => (
+        <SignedIn here={`/studio/${id}/groups`} wide>
+          {inside}
+        </SignedIn>
+      )}
+    >
+      {(studio) => <GroupsScreen studio={studio} />}
+    </StudioPage>
+  );
+}

@@ -1,0 +1,22 @@
+import { useLocalSearchParams } from "expo-router";
+import { SignedIn } from "@/features/account/SignedIn";
+import { InviteScreen } from "@/features/studio/invites/InviteScreen";
+import { StudioPage } from "@/features/studio/StudioPage";
+
+export default function InviteRoute() {
+  const { id } = useLocalSearchParams<{ id: string }>();
+  return (
+    <StudioPage
+      id={id}
+      wide
+      title="Invite"
+      door={(inside) => (
+        <SignedIn here={`/studio/${id}/invite`} wide>
+          {inside}
+        </SignedIn>
+      )}
+    >
+      {(studio) => <InviteScreen studio={studio} now={new Date()} />}
+    </StudioPage>
+  );
+}

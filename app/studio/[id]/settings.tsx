@@ -1,0 +1,22 @@
+import { useLocalSearchParams } from "expo-router";
+import { SignedIn } from "@/features/account/SignedIn";
+import { SettingsScreen } from "@/features/studio/settings/SettingsScreen";
+import { StudioPage } from "@/features/studio/StudioPage";
+
+export default function SettingsRoute() {
+  const { id } = useLocalSearchParams<{ id: string }>();
+  return (
+    <StudioPage
+      id={id}
+      wide
+      title="Settings of the studio"
+      door={(inside) => (
+        <SignedIn here={`/studio/${id}/settings`} wide>
+          {inside}
+        </SignedIn>
+      )}
+    >
+      {(studio) => <SettingsScreen studio={studio} />}
+    </StudioPage>
+  );
+}

@@ -31,6 +31,7 @@ import type { FakeSmtp } from "./mail/inbox/fakeSmtp";
 import { inboxPage } from "./mail/inbox/inboxPage";
 import { mailRoutes } from "./mail/mail.router";
 import { type ObjectStore, storageOrigin } from "./storage/objectStore.service";
+import { studioRoutes } from "./studio/studio.router";
 import { voicesRoutes } from "./voices/voices.router";
 import { playerWishesRoutes } from "./ways/playerWishes.router";
 
@@ -69,6 +70,7 @@ export function createApp(dataSource: DataSource, logger: Logger, settings: AppS
   chartsRoutes(api, dataSource);
   mailRoutes(api, dataSource, settings);
   sheetsRoutes(api, dataSource);
+  studioRoutes(api, dataSource, settings);
   adminRoutes(api, dataSource, {
     tokenSecret: settings.tokenSecret,
     stores: [{ name: "recordings", isUp: () => settings.objects.isUp() }],

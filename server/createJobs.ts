@@ -9,6 +9,10 @@ import { LinkTokensService } from "./mail/linkTokens.service";
 import { sendMailTask } from "./mail/mail.service";
 import { MailPreferencesService } from "./mail/mailPreferences.service";
 import { Postman } from "./mail/postman";
+import { WeeklySummaryService } from "./studio/weekly/weeklySummary.service";
+
+/** Writes the summaries of the week. */
+const weeklySummaryTask = "weeklySummary";
 
 /** Forgets what nobody needs any more. */
 const tidyUpTask = "tidyUp";
@@ -46,6 +50,7 @@ export function createJobs(dataSource: DataSource, settings: JobSettings): Jobs 
     [sendMailTask]: (payload) => postman.deliver(payload),
     [sendResetTask]: (payload) => sendReset(parts, payload),
     [eraseAccountsTask]: () => eraseAccounts(dataSource, personalData, parts.log),
+    [weeklySummaryTask]: () => new WeeklySummaryService(dataSource).send(),
     [tidyUpTask]: async () => {
       await parts.log.forgetOld();
       await parts.tokens.forgetOld(dataSource);
@@ -53,6 +58,7 @@ export function createJobs(dataSource: DataSource, settings: JobSettings): Jobs 
   };
   const recurring = [
     { task: eraseAccountsTask, match: "7 * * * *" },
+    { task: weeklySummaryTask, match: "12 6 * * 1" },
     { task: tidyUpTask, match: "37 3 * * *" },
   ];
   return { handlers, recurring, close: () => transport.close() };

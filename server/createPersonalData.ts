@@ -9,6 +9,8 @@ import { MailPreferencesService } from "./mail/mailPreferences.service";
 import { SheetLinksService } from "./sheets/sheetLinks.service";
 import { SongVersionsService } from "./songs/songVersions.service";
 import { songsOf } from "./songs/songs.service";
+import { studioDataOf } from "./studio/studioData.service";
+import { studioParts } from "./studio/studioParts";
 import { playerWishesOf } from "./ways/playerWishes.service";
 import { takesOf, voicesOf } from "./voices/voices.service";
 
@@ -18,6 +20,7 @@ import { takesOf, voicesOf } from "./voices/voices.service";
  */
 export function createPersonalData(dataSource: DataSource, tokenSecret: string): PersonalDataPart[] {
   const preferences = new MailPreferencesService(dataSource, tokenSecret);
+  const { studios, guardians } = studioParts(dataSource, { tokenSecret });
   const versions = new SongVersionsService(dataSource);
   return [
     {
@@ -84,6 +87,14 @@ export function createPersonalData(dataSource: DataSource, tokenSecret: string):
     {
       name: "ways",
       files: async (userId) => ({ "wishes.json": await playerWishesOf(dataSource).list(userId) }),
+    },
+    {
+      name: "studio",
+      files: (userId) => studioDataOf(dataSource, userId),
+      erase: async (userId) => {
+        await studios.passOn(userId);
+        await guardians.forget(userId);
+      },
     },
     {
       name: "instruments",

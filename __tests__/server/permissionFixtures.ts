@@ -2,7 +2,8 @@ import { randomUUID } from "node:crypto";
 import type { OpenSession } from "../../shared/contract/account";
 import type { MadeSheetLink } from "../../shared/contract/sheetLink";
 import { aDecision, aLineUp, anArrangement, anInstrument, aSong, aTake, aTry, aVoice, someWishes } from "./belongings";
-import type { Person } from "./testServer";
+import { studioFixtures } from "./studio/studioFixtures";
+import type { Person, TestServer } from "./testServer";
 
 /** A thing of one person that the ids in a path can name: the values for the path, and a body for what is sent there. */
 export interface Fixture {
@@ -12,8 +13,8 @@ export interface Fixture {
 
 /** Makes a thing of this person. `absent` gives ids that nobody has, with a body that fits them. */
 export interface FixtureMaker {
-  make: (person: Person) => Promise<Fixture>;
-  absent: (person: Person) => Promise<Fixture>;
+  make: (person: Person, server: TestServer) => Promise<Fixture>;
+  absent: (person: Person, server: TestServer) => Promise<Fixture>;
 }
 
 const collection = (plural: string, item: (person: Person) => Promise<{ id: string }>): FixtureMaker => ({
@@ -44,6 +45,7 @@ const linkOf = async (person: Person) => {
 
 /** By the beginning of the path, longest first: whoever adds a route with an id adds what its id can name. */
 export const fixtures: Record<string, FixtureMaker> = {
+  ...studioFixtures,
   "/songs/{id}/versions": {
     async make(person) {
       const song = await songOf(person);

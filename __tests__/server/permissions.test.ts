@@ -149,9 +149,9 @@ describe.each(kinds)("for somebody who is %s", (kind) => {
         // Whoever is suspended has what they made before.
         if (person && kind === "suspended") await suspend(person, false);
         const made = {
-          own: await maker.make(person ?? owner),
-          foreign: await maker.make(owner),
-          absent: await maker.absent(person ?? owner),
+          own: await maker.make(person ?? owner, server),
+          foreign: await maker.make(owner, server),
+          absent: await maker.absent(person ?? owner, server),
         };
         if (person && kind === "suspended") await suspend(person);
         return made;

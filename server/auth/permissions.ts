@@ -28,6 +28,48 @@ const collection = (name: string) => ({
   [`delete${name}Id`]: own,
 });
 
+/** The operations of studios: who is in one, and as what, decides further within it (StudioAccessService). */
+const studio = {
+  getStudios: oneself,
+  postStudios: oneself,
+  getStudiosId: own,
+  putStudiosId: own,
+  deleteStudiosId: own,
+  putStudiosIdMembersMemberId: own,
+  deleteStudiosIdMembersMemberId: own,
+  getStudiosIdRoster: own,
+  getStudiosIdRosterCsv: own,
+  getStudiosIdGroups: own,
+  postStudiosIdGroups: own,
+  putStudiosIdGroupsGroupId: own,
+  deleteStudiosIdGroupsGroupId: own,
+  putStudiosIdGroupsGroupIdKey: own,
+  getStudiosIdInvites: own,
+  // Mails go to strangers.
+  postStudiosIdInvites: { ...own, confirmed: true },
+  postStudiosIdInvitesInviteIdResend: { ...own, confirmed: true },
+  deleteStudiosIdInvitesInviteId: own,
+  postInvitesLook: visitor,
+  postInvitesAccept: oneself,
+  putStudiosIdConsent: own,
+  getGuardian: oneself,
+  postGuardian: oneself,
+  postGuardianLook: visitor,
+  postGuardianConfirm: visitor,
+  postGuardianWithdraw: visitor,
+  getStudiosIdAssignments: own,
+  postStudiosIdAssignments: own,
+  getStudiosIdAssignmentsAssignmentId: own,
+  putStudiosIdAssignmentsAssignmentId: own,
+  deleteStudiosIdAssignmentsAssignmentId: own,
+  getParts: oneself,
+  getPartsId: own,
+  putPartsId: own,
+  getPartsIdComments: own,
+  postPartsIdComments: own,
+  deletePartsIdCommentsCommentId: own,
+} as const;
+
 /** By operation id, as in the API's description. */
 export const permissions: Readonly<Record<string, Permission>> = {
   postAuthSignUp: visitor,
@@ -78,6 +120,7 @@ export const permissions: Readonly<Record<string, Permission>> = {
   postSheetLinks: oneself,
   deleteSheetLinksId: own,
   getSharedToken: { who: "visitor", object: "link" },
+  ...studio,
   getAdminUsers: admin,
   putAdminUsersIdSuspension: adminOnAny,
   putAdminUsersIdRole: adminOnAny,

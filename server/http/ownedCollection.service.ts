@@ -56,22 +56,32 @@ export class OwnedCollection<Item extends { id: string }, Row extends Item & Own
 
   /** Creates or replaces; the same request may be sent again. */
   async put(userId: string, item: Item, wishes: Wishes): Promise<{ created: boolean; item: Item }> {
-    return this.alone(userId, async (manager) => {
-      const { id } = item;
-      const kept = await this.find(manager, userId, id);
-      const { beforeSave } = this.options;
-      const next = beforeSave ? await beforeSave({ manager, userId, item, kept, wishes }) : item;
-      if (next === null && kept) return { created: false, item: kept };
-      const created = await this.write(manager, userId, next ?? item);
-      if (created) await this.refuseTooMany(manager, userId);
-      const saved = await this.find(manager, userId, id);
-      if (!saved) throw notFound(this.noun);
-      return { created, item: saved };
-    });
+    return this.dataSource.transaction((manager) => this.putIn(manager, userId, item, wishes));
+  }
+
+  /** The same within a transaction that does more. */
+  async putIn(
+    manager: EntityManager,
+    userId: string,
+    item: Item,
+    wishes: Wishes,
+  ): Promise<{ created: boolean; item: Item }> {
+    await lockAccount(manager, userId);
+    const { id } = item;
+    const kept = await this.find(manager, userId, id);
+    const { beforeSave } = this.options;
+    const next = beforeSave ? await beforeSave({ manager, userId, item, kept, wishes }) : item;
+    if (next === null && kept) return { created: false, item: kept };
+    const created = await this.write(manager, userId, next ?? item);
+    if (created) await this.refuseTooMany(manager, userId);
+    const saved = await this.find(manager, userId, id);
+    if (!saved) throw notFound(this.noun);
+    return { created, item: saved };
   }
 
   async remove(userId: string, id: string): Promise<void> {
-    await this.alone(userId, async (manager) => {
+    await this.dataSource.transaction(async (manager) => {
+      await lockAccount(manager, userId);
       await this.options.beforeRemove?.(manager, userId, id);
       const { affected } = await manager
         .createQueryBuilder()
@@ -80,18 +90,6 @@ export class OwnedCollection<Item extends { id: string }, Row extends Item & Own
         .where("user_id = :userId AND id = :id", { userId, id })
         .execute();
       if (!affected) throw notFound(this.noun);
-    });
-  }
-
-  /**
-   * One writer per account at a time, who locks the account before anything else: ON CONFLICT guards only the primary
-   * key, not the other unique index (id, user_id); the count of items must not be overtaken; and whoever removes a song
-   * and whoever decides its key would lock the two rows in opposite order.
-   */
-  private alone<Result>(userId: string, work: (manager: EntityManager) => Promise<Result>): Promise<Result> {
-    return this.dataSource.transaction(async (manager) => {
-      await manager.query("SELECT FROM users WHERE id = $1 FOR NO KEY UPDATE", [userId]);
-      return work(manager);
     });
   }
 
@@ -133,6 +131,15 @@ export class OwnedCollection<Item extends { id: string }, Row extends Item & Own
       );
     }
   }
+}
+
+/**
+ * One writer per account at a time, who locks the account before anything else: ON CONFLICT guards only the primary key,
+ * not the other unique index (id, user_id); the count of items must not be overtaken; and whoever removes a song and
+ * whoever decides its key would lock the two rows in opposite order.
+ */
+async function lockAccount(manager: EntityManager, userId: string): Promise<void> {
+  await manager.query("SELECT FROM users WHERE id = $1 FOR NO KEY UPDATE", [userId]);
 }
 
 function rowsOf<Row extends OwnedEntity>(manager: EntityManager, entity: new () => Row, userId: string) {

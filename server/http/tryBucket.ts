@@ -21,10 +21,10 @@ export class TryBucket {
     });
   }
 
-  /** Counts a try, and refuses one too many. */
-  async take(key: string): Promise<void> {
+  /** Counts a try, or several at once, and refuses one too many. */
+  async take(key: string, tries = 1): Promise<void> {
     try {
-      await this.limiter.consume(key);
+      await this.limiter.consume(key, tries);
     } catch (error) {
       if (!(error instanceof RateLimiterRes)) throw error;
       const minutes = Math.max(1, Math.ceil(error.msBeforeNext / 60_000));

@@ -52,6 +52,11 @@ export class LinkTokensService {
     return { id, purpose };
   }
 
+  /** Makes the links about a row worth nothing. */
+  async forget(connection: Connection, subject: string, purposes: readonly string[]): Promise<void> {
+    await connection.query("DELETE FROM link_tokens WHERE subject = $1 AND purpose = ANY($2)", [subject, purposes]);
+  }
+
   /** The token as it stands in the link. */
   written({ id, purpose }: LinkToken): string {
     return createHmac("sha256", this.secret).update(`link ${purpose} ${id}`).digest("base64url");

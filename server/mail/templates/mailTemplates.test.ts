@@ -13,6 +13,7 @@ const data: { [Kind in MailKind]: Parameters<(typeof mailTemplates)[Kind]>[0] } 
   erasure: { onDay: "15 December 2026" },
   invite: { teacher: hostile, studio: hostile },
   guardian: { pupil: hostile, studio: hostile, teacher: hostile },
+  guardianKept: { pupil: hostile, studio: hostile },
   assigned: { studio: hostile, song: hostile, key: "B♭ major", due: "12 December", note: hostile },
   handedIn: { pupil: hostile, song: hostile, note: hostile },
   answered: { teacher: hostile, song: hostile, accepted: false, note: hostile },

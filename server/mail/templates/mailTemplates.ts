@@ -1,5 +1,13 @@
 import { confirmMail, emailChangeMail, erasureMail, knownAddressMail, resetMail, securityMail } from "./accountMails";
-import { answeredMail, assignedMail, guardianMail, handedInMail, inviteMail, weeklyMail } from "./studioMails";
+import {
+  answeredMail,
+  assignedMail,
+  guardianKeptMail,
+  guardianMail,
+  handedInMail,
+  inviteMail,
+  weeklyMail,
+} from "./studioMails";
 
 /** Every kind of mail that Larkspan sends: from its data and the link it leads to. */
 export const mailTemplates = {
@@ -11,6 +19,7 @@ export const mailTemplates = {
   erasure: erasureMail,
   invite: inviteMail,
   guardian: guardianMail,
+  guardianKept: guardianKeptMail,
   assigned: assignedMail,
   handedIn: handedInMail,
   answered: answeredMail,

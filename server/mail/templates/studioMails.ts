@@ -38,6 +38,24 @@ export function guardianMail({ pupil, studio, teacher }: GuardianData, link: str
   });
 }
 
+export interface GuardianKeptData {
+  pupil: string;
+  studio: string;
+}
+
+/** To a guardian who agreed: by this link they can take it back, today or in years. */
+export function guardianKeptMail({ pupil, studio }: GuardianKeptData, link: string): Mail {
+  return setMail({
+    subject: `You agreed for ${pupil}`,
+    says: [
+      `You agreed that the teachers of "${studio}" at Larkspan see and hear what ${pupil} shares with them.`,
+      "Keep this mail: by its link you can look at it again and take your word back at any time. From that moment the teachers see nothing any more.",
+    ],
+    action: { label: "Look at it or take it back", link },
+    foot: [],
+  });
+}
+
 export interface AssignedData {
   studio: string;
   song: string;

@@ -1,0 +1,52 @@
+import type { DataSource, EntityManager } from "typeorm";
+import { HttpProblem } from "../../http/httpProblem";
+import { memberWaitsForGuardian } from "./digitalConsent";
+import type { GuardiansService } from "./guardians.service";
+
+/** Agreeing that the teachers of a studio see and hear, and taking it back. */
+export class ConsentService {
+  constructor(
+    private readonly dataSource: DataSource,
+    private readonly guardians: GuardiansService,
+  ) {}
+
+  async set(memberId: string, userId: string, agree: boolean): Promise<void> {
+    await this.dataSource.transaction((manager) =>
+      agree ? this.give(manager, memberId, userId) : this.withdraw(manager, memberId),
+    );
+  }
+
+  /** A guardian who is known already is asked at once. */
+  async give(manager: EntityManager, memberId: string, userId: string): Promise<void> {
+    const [person]: { told: boolean }[] = await manager.query(
+      "SELECT birth_year IS NOT NULL AS told FROM users WHERE id = $1",
+      [userId],
+    );
+    if (!person?.told)
+      throw new HttpProblem(
+        409,
+        "birth-year-needed",
+        "Say first in which year you were born: it decides who must agree.",
+      );
+    await manager.query(
+      `UPDATE studio_members SET consent_withdrawn_at = NULL,
+         consent_given_at = CASE WHEN consent_given_at IS NULL OR consent_withdrawn_at IS NOT NULL THEN now()
+                                 ELSE consent_given_at END
+       WHERE id = $1`,
+      [memberId],
+    );
+    const [waiting]: object[] = await manager.query(
+      `SELECT FROM studio_members m JOIN users u ON u.id = m.user_id WHERE m.id = $1 AND ${memberWaitsForGuardian}`,
+      [memberId],
+    );
+    if (waiting) await this.guardians.askAgain(manager, userId);
+  }
+
+  private async withdraw(manager: EntityManager, memberId: string): Promise<void> {
+    await manager.query(
+      `UPDATE studio_members SET consent_withdrawn_at = now()
+       WHERE id = $1 AND consent_given_at IS NOT NULL AND consent_withdrawn_at IS NULL`,
+      [memberId],
+    );
+  }
+}

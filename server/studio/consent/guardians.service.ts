@@ -1,0 +1,215 @@
+import type { DataSource, EntityManager } from "typeorm";
+import { type GuardianLook, type GuardianState, whatTeachersSee } from "../../../shared/contract/studio/consent";
+import { listWords } from "../../../shared/music/listWords";
+import { HttpProblem } from "../../http/httpProblem";
+import type { LinkTokensService } from "../../mail/linkTokens.service";
+import { enqueueMail } from "../../mail/mail.service";
+import { ageOfDigitalConsent, memberShares, memberWaitsForGuardian, personNeedsGuardian } from "./digitalConsent";
+
+/** To decide, and to change one's mind later. The account's own links end when its address changes; these must not. */
+const askPurpose = "guardian-ask";
+const keepPurpose = "guardian-keep";
+const purposes = [askPurpose, keepPurpose];
+const dayS = 24 * 3600;
+const askLifeS = 14 * dayS;
+const keepLifeS = 20 * 365 * dayS;
+const page = "/guardian";
+
+type Connection = DataSource | EntityManager;
+
+interface AskedStudio {
+  name: string;
+  pupil: string;
+  teachers: string[];
+  recordingsKeptDays: number;
+  waits: boolean;
+}
+
+/** Parents and guardians of those who may not agree alone. They have no account: what they do, they do by links from mails. */
+export class GuardiansService {
+  constructor(
+    private readonly dataSource: DataSource,
+    private readonly tokens: LinkTokensService,
+  ) {}
+
+  async state(userId: string): Promise<GuardianState> {
+    const rows: {
+      needed: boolean | null;
+      country: string | null;
+      email: string | null;
+      askedAt: Date | null;
+      confirmedAt: Date | null;
+      withdrawnAt: Date | null;
+      waits: boolean;
+    }[] = await this.dataSource.query(
+      `SELECT ${personNeedsGuardian} AS needed, u.country, g.email, g.asked_at AS "askedAt",
+              g.confirmed_at AS "confirmedAt", g.withdrawn_at AS "withdrawnAt",
+              EXISTS (SELECT FROM studio_members m WHERE m.user_id = u.id AND ${memberWaitsForGuardian}) AS waits
+       FROM users u LEFT JOIN guardians g ON g.user_id = u.id WHERE u.id = $1`,
+      [userId],
+    );
+    const [row] = rows;
+    const instant = (at: Date | null | undefined) => at?.toISOString() ?? null;
+    return {
+      needed: row?.needed ?? null,
+      age: ageOfDigitalConsent(row?.country ?? null),
+      email: row?.email ?? null,
+      askedAt: instant(row?.askedAt),
+      confirmedAt: row?.waits ? null : instant(row?.confirmedAt),
+      withdrawnAt: instant(row?.withdrawnAt),
+    };
+  }
+
+  /** Names a guardian and writes to them; also to write once more, or to somebody else. */
+  async ask(userId: string, email: string): Promise<void> {
+    await this.dataSource.transaction(async (manager) => {
+      const [person]: { email: string; needed: boolean | null }[] = await manager.query(
+        `SELECT u.email, ${personNeedsGuardian} AS needed FROM users u WHERE u.id = $1 FOR NO KEY UPDATE`,
+        [userId],
+      );
+      if (person?.needed !== true)
+        throw new HttpProblem(
+          409,
+          "no-guardian-needed",
+          "At your age you agree by yourself, or you have not told your age.",
+        );
+      if (person.email.toLowerCase() === email.toLowerCase())
+        throw new HttpProblem(422, "invalid", "This is your own address.", [
+          { path: "email", message: "Write the address of a parent or guardian, not your own." },
+        ]);
+      await manager.query(
+        `INSERT INTO guardians (user_id, email) VALUES ($1, $2)
+         ON CONFLICT (user_id) DO UPDATE SET email = $2, asked_at = now(), withdrawn_at = NULL`,
+        [userId, email],
+      );
+      if (!(await this.write(manager, userId, email)))
+        throw new HttpProblem(409, "nothing-to-confirm", "Agree in a studio first; then a guardian can confirm it.");
+    });
+  }
+
+  /** For one more studio; a guardian who took their word back is not written to unless the pupil asks. */
+  async askAgain(manager: EntityManager, userId: string): Promise<void> {
+    const [rows]: [{ email: string }[], number] = await manager.query(
+      "UPDATE guardians SET asked_at = now() WHERE user_id = $1 AND withdrawn_at IS NULL RETURNING email",
+      [userId],
+    );
+    if (rows[0]) await this.write(manager, userId, rows[0].email);
+  }
+
+  /** What the link is about; null if it is not one of ours any more. */
+  async look(token: string): Promise<GuardianLook | null> {
+    const userId = await this.pupilOf(this.dataSource, token);
+    if (userId === null) return null;
+    const studios = await this.studiosOf(this.dataSource, userId);
+    return {
+      pupil: studios[0]?.pupil ?? "",
+      studios: studios.map(({ name, teachers, recordingsKeptDays, waits }) => ({
+        ...{ name, teachers, recordingsKeptDays },
+        confirmed: !waits,
+      })),
+      sees: whatTeachersSee(Math.max(1, ...studios.map(({ recordingsKeptDays }) => recordingsKeptDays))),
+      confirmed: studios.length > 0 && studios.every(({ waits }) => !waits),
+    };
+  }
+
+  /** The guardian's word, for every studio that waits for it; a mail brings the link by which it can be taken back. */
+  async confirm(token: string): Promise<boolean> {
+    return this.dataSource.transaction(async (manager) => {
+      const spent = await this.tokens.spend(manager, askPurpose, token);
+      const kept = spent ?? (await this.tokens.look(manager, keepPurpose, token));
+      const userId = kept?.subject;
+      if (!kept || !userId || !(await this.isStillHere(manager, userId))) return false;
+      const studios = (await this.studiosOf(manager, userId)).filter(({ waits }) => waits);
+      await manager.query(
+        `UPDATE studio_members SET guardian_agreed_at = now() WHERE id IN (
+           SELECT m.id FROM studio_members m JOIN users u ON u.id = m.user_id
+           WHERE m.user_id = $1 AND ${memberWaitsForGuardian})`,
+        [userId],
+      );
+      await manager.query(
+        "UPDATE guardians SET confirmed_at = now(), withdrawn_at = NULL WHERE user_id = $1 AND email = $2",
+        [userId, kept.email],
+      );
+      if (!spent) return true;
+      const keep = await this.tokens.issue(manager, {
+        ...{ purpose: keepPurpose, email: kept.email, lifeS: keepLifeS, subject: userId },
+      });
+      await enqueueMail(manager, {
+        event: `guardian-kept:${keep.id}`,
+        kind: "guardianKept",
+        to: kept.email,
+        userId,
+        data: { pupil: studios[0]?.pupil ?? "", studio: listWords(studios.map(({ name }) => name)) },
+        path: page,
+        token: keep,
+      });
+      return true;
+    });
+  }
+
+  /** Says no, or takes the word back: at once nothing is shared any more. */
+  async withdraw(token: string): Promise<boolean> {
+    return this.dataSource.transaction(async (manager) => {
+      const spent = await this.tokens.spend(manager, askPurpose, token);
+      const userId = (spent ?? (await this.tokens.look(manager, keepPurpose, token)))?.subject;
+      if (!userId || !(await this.isStillHere(manager, userId))) return false;
+      await manager.query("UPDATE guardians SET withdrawn_at = now() WHERE user_id = $1", [userId]);
+      await manager.query("UPDATE studio_members SET guardian_agreed_at = NULL WHERE user_id = $1", [userId]);
+      return true;
+    });
+  }
+
+  /** Links about a person who goes. */
+  async forget(userId: string): Promise<void> {
+    await this.tokens.forget(this.dataSource, userId, purposes);
+  }
+
+  private async write(manager: EntityManager, userId: string, email: string): Promise<boolean> {
+    const studios = (await this.studiosOf(manager, userId)).filter(({ waits }) => waits);
+    const [first] = studios;
+    if (!first) return false;
+    const token = await this.tokens.issue(manager, { purpose: askPurpose, email, lifeS: askLifeS, subject: userId });
+    await enqueueMail(manager, {
+      event: `guardian:${token.id}`,
+      kind: "guardian",
+      to: email,
+      userId,
+      data: {
+        pupil: first.pupil,
+        studio: listWords(studios.map(({ name }) => name)),
+        teacher: listWords([...new Set(studios.flatMap(({ teachers }) => teachers[0] ?? []))]),
+      },
+      path: page,
+      token,
+    });
+    return true;
+  }
+
+  private async pupilOf(connection: Connection, token: string): Promise<string | null> {
+    for (const purpose of purposes) {
+      const userId = (await this.tokens.look(connection, purpose, token))?.subject;
+      if (userId && (await this.isStillHere(connection, userId))) return userId;
+    }
+    return null;
+  }
+
+  private async isStillHere(connection: Connection, userId: string): Promise<boolean> {
+    const rows: object[] = await connection.query("SELECT FROM guardians WHERE user_id = $1", [userId]);
+    return rows.length > 0;
+  }
+
+  /** Those in which the pupil agreed, whether or not a guardian has. */
+  private async studiosOf(connection: Connection, userId: string): Promise<AskedStudio[]> {
+    return connection.query(
+      `SELECT s.name, m.name AS pupil, s.recordings_kept_days AS "recordingsKeptDays",
+              ${memberWaitsForGuardian} AS waits,
+              ARRAY(SELECT t.name FROM studio_members t
+                    WHERE t.studio_id = s.id AND t.left_at IS NULL AND t.role <> 'pupil'
+                    ORDER BY t.role DESC, t.joined_at, t.id) AS teachers
+       FROM studio_members m JOIN users u ON u.id = m.user_id JOIN studios s ON s.id = m.studio_id
+       WHERE m.user_id = $1 AND (${memberWaitsForGuardian} OR ${memberShares})
+       ORDER BY m.joined_at, m.id`,
+      [userId],
+    );
+  }
+}

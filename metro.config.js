@@ -20,6 +20,7 @@ const workers = {
   "/worklets/tunerWorker.js": "features/instruments/tuner/hearing/tunerWorker.ts",
   "/worklets/songFileWorker.js": "features/songs/files/songFileWorker.ts",
   "/worklets/wayWorker.js": "features/ways/search/wayWorker.ts",
+  "/worklets/pupilsWorker.js": "features/studio/judge/pupilsWorker.ts",
 };
 const bundleWorker = (address) =>
   esbuild.buildSync({

@@ -31,6 +31,12 @@ export function songSequence(song: Pick<Song, "chart">): string[] {
   return playedChords(parseChart(song.chart));
 }
 
+/** A song as others are given it: its key, its chords, and the same as they are played; null without a key. */
+export function songPiece(song: Song) {
+  const written = writtenKeyOf(song);
+  return written && { song, written, chords: songChords(song), sequence: songSequence(song) };
+}
+
 /** Chords moved into a key. */
 export function chordsIn(chords: readonly string[], from: KeyName, to: KeyName): string[] {
   const semitones = (tonicPitchClass(to.tonic) - tonicPitchClass(from.tonic) + 12) % 12;

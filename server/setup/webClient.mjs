@@ -9,7 +9,7 @@ import { locked } from "./postgres.mjs";
 const sources = ["app", "features", "shared", "assets", "fonts", "public"];
 const configs = ["package-lock.json", "app.json", "metro.config.js", "babel.config.js", "tsconfig.json"];
 /** Made by metro.config.js from the sources. */
-const made = ["takeWorker.js", "guidedWorker.js", "tunerWorker.js", "songFileWorker.js", "wayWorker.js"].map((file) =>
+const made = ["takeWorker.js", "guidedWorker.js", "tunerWorker.js", "songFileWorker.js", "wayWorker.js", "pupilsWorker.js"].map((file) =>
   path.join("public", "worklets", file),
 );
 const packed = /\.(js|css|html|svg|json|map|txt|webmanifest)$/;

@@ -2,7 +2,8 @@ import { useCallback, useEffect, useRef, useState } from "react";
 import { View } from "react-native";
 import { ApiError } from "@/features/api/apiError";
 import { http } from "@/features/api/httpClient";
-import { useMailedToken } from "@/features/api/useMailedToken";
+import { keptTokens } from "@/features/api/keptTokens";
+import { useTokenOverSignIn } from "@/features/api/useTokenOverSignIn";
 import { session } from "@/features/api/session";
 import { useSession } from "@/features/api/SessionProvider";
 import { EmptyState } from "@/features/ui/EmptyState";
@@ -10,24 +11,13 @@ import { ErrorState } from "@/features/ui/ErrorState";
 import { LinkButton } from "@/features/ui/LinkButton";
 import { Skeleton } from "@/features/ui/Skeleton";
 import type { Account } from "@/shared/contract/account";
-import { keptToken } from "./keptToken";
 
 type Outcome = { email: string } | ApiError | null;
-
-/** The token of the address, or the one that was kept while its owner signed in. */
-function useTokenOverSignIn(): string {
-  const mailed = useMailedToken();
-  const [token] = useState(() => {
-    if (mailed !== "") keptToken.keep(mailed);
-    return mailed || keptToken.read();
-  });
-  return token;
-}
 
 /** Shows that an address is one's own, by the link from the mail; only for whoever is signed in. */
 export function ConfirmPage() {
   const { status } = useSession();
-  const token = useTokenOverSignIn();
+  const token = useTokenOverSignIn(keptTokens.confirm);
   const [outcome, setOutcome] = useState<Outcome>(null);
   const begun = useRef(false);
 
@@ -35,12 +25,12 @@ export function ConfirmPage() {
     setOutcome(null);
     try {
       const account = await http.post<Account>("/account/email/confirm", { token });
-      keptToken.clear();
+      keptTokens.confirm.clear();
       session.accountChanged(account);
       setOutcome({ email: account.email });
     } catch (error) {
       const refused = error instanceof ApiError ? error : ApiError.offline();
-      if (refused.refused) keptToken.clear();
+      if (refused.refused) keptTokens.confirm.clear();
       setOutcome(refused);
     }
   }, [token]);

@@ -1,0 +1,65 @@
+import { useQueries, useQuery } from "@tanstack/react-query";
+import { useLocalSearchParams, useRouter } from "expo-router";
+import { useMemo } from "react";
+import { SignedIn } from "@/features/account/SignedIn";
+import { instrumentOf } from "@/features/instruments/myInstruments";
+import { songPiece } from "@/features/keys/songKeys";
+import { songQueries } from "@/features/songs/songQueries";
+import { AssignScreen, type UseWays, type WantedWays } from "@/features/studio/assign/AssignScreen";
+import { StudioPage } from "@/features/studio/StudioPage";
+import { QueryState } from "@/features/ui/QueryState";
+import { wayQueries } from "@/features/ways/wayQueries";
+import { usualWishes } from "@/features/ways/wishes/wishes";
+import type { Studio } from "@/shared/contract/studio/studio";
+
+export default function AssignRoute() {
+  const { id } = useLocalSearchParams<{ id: string }>();
+  return (
+    <StudioPage
+      id={id}
+      wide
+      title="Assign a song"
+      door={(inside) => (
+        <SignedIn here={`/studio/${id}/assign`} wide>
+          {inside}
+        </SignedIn>
+      )}
+    >
+      {(studio) => <Assign studio={studio} />}
+    </StudioPage>
+  );
+}
+
+function Assign({ studio }: { studio: Studio }) {
+  const router = useRouter();
+  const asked = useLocalSearchParams<{ song?: string; key?: string; group?: string }>();
+  const songs = useQuery(songQueries.all());
+  const song = songs.data?.find(({ id }) => id === asked.song) ?? null;
+  const piece = useMemo(() => song && songPiece(song), [song]);
+  return (
+    <QueryState query={songs} title="Your songs could not be listed">
+      {(all) => (
+        <AssignScreen
+          studio={studio}
+          songs={all.filter(({ archivedAt }) => archivedAt === null)}
+          songId={song?.id ?? null}
+          onSong={(chosen) => router.setParams({ song: chosen })}
+          piece={piece}
+          asked={asked.key !== undefined && /^[A-G][#b]?$/.test(asked.key) ? asked.key : null}
+          group={asked.group ?? null}
+          useWays={useWays}
+          instrumentOf={instrumentOf}
+        />
+      )}
+    </QueryState>
+  );
+}
+
+const useWays: UseWays = (wanted) =>
+  useQueries({
+    queries: wanted.map(({ playing, to }) => wayQueries.into(playing && playingOf(playing), to)),
+  }).map(({ data, error }, k) => data ?? (wanted[k]?.playing && !error ? undefined : null));
+
+function playingOf({ piece: { chords, sequence, written }, instrument, wishes }: WantedWays) {
+  return { chords, sequence, from: written, instrument, wishes: wishes ?? usualWishes };
+}

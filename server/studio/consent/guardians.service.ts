@@ -1,5 +1,6 @@
 import type { DataSource, EntityManager } from "typeorm";
-import { type GuardianLook, type GuardianState, whatTeachersSee } from "../../../shared/contract/studio/consent";
+import type { GuardianLook, GuardianState } from "../../../shared/contract/studio/consent";
+import { whatTeachersSee } from "../../../shared/contract/studio/whatTeachersSee";
 import { listWords } from "../../../shared/music/listWords";
 import { HttpProblem } from "../../http/httpProblem";
 import type { LinkTokensService } from "../../mail/linkTokens.service";

@@ -1,6 +1,6 @@
 import { randomUUID } from "node:crypto";
 import type { DataSource, EntityManager } from "typeorm";
-import { whatTeachersSee } from "../../../shared/contract/studio/consent";
+import { whatTeachersSee } from "../../../shared/contract/studio/whatTeachersSee";
 import type { Invite, InviteAcceptance, InviteLook, InviteRequest } from "../../../shared/contract/studio/invite";
 import { HttpProblem, notFound } from "../../http/httpProblem";
 import type { LinkTokensService } from "../../mail/linkTokens.service";

@@ -18,7 +18,7 @@ interface Person {
   password: string;
 }
 
-interface Answer {
+export interface Answer {
   status: number;
   body?: unknown;
 }

@@ -3,6 +3,7 @@ import { mkdtempSync } from "node:fs";
 import { tmpdir } from "node:os";
 import path from "node:path";
 import type { Express } from "express";
+import { Pool } from "pg";
 import request, { type Test } from "supertest";
 import type { DataSource } from "typeorm";
 import type { Role, SessionResponse } from "../../shared/contract/account";
@@ -68,13 +69,17 @@ export async function startTestServer(
     mailFrom: "Larkspan <no-reply@larkspan.test>",
     origin: settings.publicOrigin ?? "http://larkspan.test",
   });
+  const pool = new Pool({ connectionString: database.url, max: 3 });
+  pool.on("error", () => undefined);
+  pool.on("connect", (client) => client.on("error", () => undefined));
   const close = async () => {
     jobs.close();
+    await pool.end();
     await Promise.all([smtp.stop(), s3.stop()]);
     if (dataSource.isInitialized) await dataSource.destroy();
     await database.drop();
   };
-  return { app, api, database, dataSource, smtp, s3, runJobs: () => workOffQueue(database.url, jobs), close };
+  return { app, api, database, dataSource, smtp, s3, runJobs: () => workOffQueue(pool, jobs), close };
 }
 
 /** Somebody with an account of their own. */

@@ -33,9 +33,11 @@ export function useServerForm<Values extends FieldValues>(
   const problem = useRef<HTMLDivElement>(null);
   const own = useRef<string[]>([]);
   own.current = Object.keys(defaultValues);
+  /** the form that was sent, where a page has several */
+  const sent = useRef<Element | null>(null);
   useEffect(() => {
     if (submitCount === 0) return;
-    const wrong = document.querySelector<HTMLElement>("form [aria-invalid=true]");
+    const wrong = (sent.current ?? document).querySelector<HTMLElement>("form [aria-invalid=true]");
     (wrong ?? problem.current)?.focus();
   }, [refusal, submitCount]);
 
@@ -54,5 +56,11 @@ export function useServerForm<Values extends FieldValues>(
     }
   }
 
-  return { form, end: { refusal, sending, problem }, submit: () => void (sending || form.handleSubmit(attempt)()) };
+  function submit() {
+    if (sending) return;
+    sent.current = document.activeElement?.closest("form") ?? null;
+    void form.handleSubmit(attempt)();
+  }
+
+  return { form, end: { refusal, sending, problem }, submit };
 }

@@ -1,4 +1,5 @@
 import { Logger as QueueLogger, parseCronItems, run, runOnce } from "graphile-worker";
+import type { Pool } from "pg";
 import type { Logger } from "pino";
 import { jobsSchema } from "./jobs.service";
 
@@ -36,13 +37,12 @@ export async function startWorker(connectionString: string, jobs: Jobs, logger: 
 }
 
 /** Does what is due now, and returns. */
-export async function workOffQueue(connectionString: string, jobs: Jobs): Promise<void> {
+export async function workOffQueue(pgPool: Pool, jobs: Jobs): Promise<void> {
   await runOnce({
-    connectionString,
+    pgPool,
     schema: jobsSchema,
     taskList: taskList(jobs),
     noHandleSignals: true,
-    maxPoolSize: 3,
     logger: silent,
   });
 }

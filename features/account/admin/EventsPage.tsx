@@ -1,11 +1,11 @@
 import { useInfiniteQuery } from "@tanstack/react-query";
 import { View } from "react-native";
-import { Button } from "@/features/ui/Button";
 import { QueryState } from "@/features/ui/QueryState";
 import { Text } from "@/features/ui/Text";
 import { momentInWords } from "../momentInWords";
 import { adminQueries } from "./adminQueries";
 import { Records } from "./Records";
+import { ShowMore } from "./ShowMore";
 
 const sentence = (what: string) => `${what.charAt(0).toUpperCase()}${what.slice(1).replaceAll("-", " ")}`;
 
@@ -20,6 +20,7 @@ export function EventsPage() {
       <QueryState query={query} title="The events could not be listed">
         {({ pages }) => (
           <>
+            {pages.flat().length === 0 && <Text variant="body">Nothing has happened yet.</Text>}
             <Records
               caption="Security events, newest first"
               columns={["When", "What", "Account", "By", "Address"]}
@@ -33,15 +34,7 @@ export function EventsPage() {
                 addressHash?.slice(0, 8) ?? "none",
               ]}
             />
-            {query.hasNextPage && (
-              <Button
-                kind="secondary"
-                small
-                label="Show more"
-                busy={query.isFetchingNextPage}
-                onPress={() => void query.fetchNextPage()}
-              />
-            )}
+            <ShowMore query={query} />
           </>
         )}
       </QueryState>

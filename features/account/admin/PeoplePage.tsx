@@ -15,6 +15,7 @@ import type { AdminUser } from "@/shared/contract/admin";
 import { momentInWords } from "../momentInWords";
 import { adminQueries } from "./adminQueries";
 import { Records } from "./Records";
+import { ShowMore } from "./ShowMore";
 
 const roles: { value: Role; label: string }[] = [
   { value: "singer", label: "Singer" },
@@ -103,15 +104,7 @@ export function PeoplePage() {
                 ),
               ]}
             />
-            {query.hasNextPage && (
-              <Button
-                kind="secondary"
-                small
-                label="Show more"
-                busy={query.isFetchingNextPage}
-                onPress={() => void query.fetchNextPage()}
-              />
-            )}
+            <ShowMore query={query} />
           </>
         )}
       </QueryState>

@@ -1,8 +1,6 @@
 import { useState } from "react";
 import { http } from "@/features/api/httpClient";
-import { Card } from "@/features/ui/Card";
 import { Form } from "@/features/ui/Form";
-import { Heading } from "@/features/ui/Heading";
 import { Notice } from "@/features/ui/Notice";
 import { Text } from "@/features/ui/Text";
 import type { Account } from "@/shared/contract/account";
@@ -10,42 +8,58 @@ import { checkAddress } from "../forms/checkPassword";
 import { FormEnd } from "@/features/ui/form/FormEnd";
 import { FormField } from "@/features/ui/form/FormField";
 import { KnownPasswordField } from "../forms/PasswordField";
+import { UnfoldingCard } from "../forms/UnfoldingCard";
 import { useServerForm } from "@/features/api/useServerForm";
+
+function NewAddressForm({ onAsked }: { onAsked: (email: string) => void }) {
+  const { form, end, submit } = useServerForm({ email: "", password: "" }, async (typed) => {
+    const email = typed.email.trim();
+    await http.post("/account/email", { email, password: typed.password });
+    onAsked(email);
+  });
+  return (
+    <Form label="Change the e-mail address" onSubmit={submit}>
+      <FormField
+        form={form}
+        name="email"
+        label="New e-mail address"
+        check={checkAddress}
+        autoComplete="email"
+        inputMode="email"
+        testID="new-email"
+      />
+      <KnownPasswordField form={form} name="password" testID="email-password" />
+      <FormEnd small {...end} sendLabel="Change the address" busyLabel="Sending the link" testID="send-email" />
+    </Form>
+  );
+}
 
 /** Another address for the account; the present one stays until the new one is confirmed. */
 export function ChangeEmail({ account }: { account: Account }) {
   const [sentTo, setSentTo] = useState<string | null>(null);
-  const { form, end, submit } = useServerForm({ email: "", password: "" }, async (typed) => {
-    setSentTo(null);
-    const email = typed.email.trim();
-    await http.post("/account/email", { email, password: typed.password });
-    setSentTo(email);
-    form.reset();
-  });
   return (
-    <Card style={{ gap: 16 }}>
-      <Heading level={2}>E-mail address</Heading>
+    <UnfoldingCard
+      title="E-mail address"
+      openLabel="Change the address"
+      closeLabel="Not now"
+      testID="change-email"
+      form={(fold) => (
+        <NewAddressForm
+          onAsked={(email) => {
+            setSentTo(email);
+            fold();
+          }}
+        />
+      )}
+    >
       <Text variant="body" style={{ overflowWrap: "anywhere" } as object}>
         {`${account.email}, ${account.confirmed ? "confirmed" : "not confirmed yet"}`}
       </Text>
-      <Form label="Change the e-mail address" onSubmit={submit}>
-        <FormField
-          form={form}
-          name="email"
-          label="New e-mail address"
-          check={checkAddress}
-          autoComplete="email"
-          inputMode="email"
-          testID="new-email"
-        />
-        <KnownPasswordField form={form} name="password" testID="email-password" />
-        {sentTo !== null && (
-          <Notice kind="good" testID="email-asked">
-            {`A link is on its way to ${sentTo}. Until you open it, your address stays as it is.`}
-          </Notice>
-        )}
-        <FormEnd small {...end} sendLabel="Change the address" busyLabel="Sending the link" testID="change-email" />
-      </Form>
-    </Card>
+      {sentTo !== null && (
+        <Notice kind="good" testID="email-asked">
+          {`A link is on its way to ${sentTo}. Until you open it, your address stays as it is.`}
+        </Notice>
+      )}
+    </UnfoldingCard>
   );
 }

@@ -1,15 +1,15 @@
 import { useQueryClient } from "@tanstack/react-query";
 import { useState } from "react";
+import { ApiError } from "@/features/api/apiError";
 import { http } from "@/features/api/httpClient";
-import { Card } from "@/features/ui/Card";
 import { Form } from "@/features/ui/Form";
-import { Heading } from "@/features/ui/Heading";
 import { Notice } from "@/features/ui/Notice";
+import { Text } from "@/features/ui/Text";
 import { checkNewPassword } from "../forms/checkPassword";
 import { FormEnd } from "@/features/ui/form/FormEnd";
 import { KnownPasswordField, PasswordField } from "../forms/PasswordField";
 import { useServerForm } from "@/features/api/useServerForm";
-import { ApiError } from "@/features/api/apiError";
+import { UnfoldingCard } from "../forms/UnfoldingCard";
 import { accountQueries } from "../accountQueries";
 
 /** The server calls the present password "password" in its complaints, the form "present". */
@@ -18,40 +18,59 @@ function placed(error: unknown): unknown {
   return new ApiError(error.status, error.code, error.message, [{ path: "present", message: error.message }]);
 }
 
-/** Another password; all other sessions end with it. */
-export function ChangePassword() {
+function NewPasswordForm({ onChanged }: { onChanged: () => void }) {
   const client = useQueryClient();
-  const [done, setDone] = useState(false);
   const { form, end, submit } = useServerForm({ present: "", next: "" }, async (typed) => {
-    setDone(false);
     await http.post("/account/password", typed).catch((error: unknown) => {
       throw placed(error);
     });
-    form.reset();
-    setDone(true);
+    onChanged();
     await client.invalidateQueries({ queryKey: accountQueries.sessions().queryKey });
   });
   return (
-    <Card style={{ gap: 16 }}>
-      <Heading level={2}>Password</Heading>
-      <Form label="Change the password" onSubmit={submit}>
-        <KnownPasswordField form={form} name="present" label="Present password" testID="present-password" />
-        <PasswordField
-          form={form}
-          name="next"
-          label="New password"
-          check={checkNewPassword}
-          hint="At least 12 characters. A few words in a row are easy to keep in mind; pasting is fine."
-          autoComplete="new-password"
-          testID="next-password"
+    <Form label="Change the password" onSubmit={submit}>
+      <KnownPasswordField form={form} name="present" label="Present password" testID="present-password" />
+      <PasswordField
+        form={form}
+        name="next"
+        label="New password"
+        check={checkNewPassword}
+        hint="At least 12 characters. A few words in a row are easy to keep in mind; pasting is fine."
+        autoComplete="new-password"
+        testID="next-password"
+      />
+      <FormEnd small {...end} sendLabel="Change the password" busyLabel="Changing it" testID="send-password" />
+    </Form>
+  );
+}
+
+/** Another password; all other sessions end with it. */
+export function ChangePassword() {
+  const [done, setDone] = useState(false);
+  return (
+    <UnfoldingCard
+      title="Password"
+      openLabel="Change the password"
+      closeLabel="Not now"
+      testID="change-password"
+      form={(fold) => (
+        <NewPasswordForm
+          onChanged={() => {
+            setDone(true);
+            fold();
+          }}
         />
-        {done && (
-          <Notice kind="good" testID="password-changed">
-            Your password is changed. You stay signed in here; all other sessions have ended.
-          </Notice>
-        )}
-        <FormEnd small {...end} sendLabel="Change the password" busyLabel="Changing it" testID="change-password" />
-      </Form>
-    </Card>
+      )}
+    >
+      {done ? (
+        <Notice kind="good" testID="password-changed">
+          Your password is changed. You stay signed in here; all other sessions have ended.
+        </Notice>
+      ) : (
+        <Text variant="small" tone="soft">
+          A new one ends all other sessions. You stay signed in here.
+        </Text>
+      )}
+    </UnfoldingCard>
   );
 }

@@ -4,7 +4,6 @@ import { FakeApi } from "@/__tests__/client/fakeApi";
 import { queryClient } from "@/features/api/queryClient";
 import { session } from "@/features/api/session";
 import { SecondFactorCard } from "./SecondFactorCard";
-import { ChangePassword } from "./ChangePassword";
 
 const account = {
   id: "00000000-0000-4000-8000-000000000001",
@@ -64,15 +63,4 @@ it("does not offer codes before the address is confirmed", async () => {
   show(<SecondFactorCard account={{ ...account, confirmed: false }} />);
   expect((await screen.findByTestId("codes-on")).getAttribute("aria-disabled")).toBe("true");
   expect(screen.getByText(/Confirm your e-mail address first/)).toBeTruthy();
-});
-
-it("says at the present password that it is wrong, and keeps both passwords", async () => {
-  answers["POST /account/password"] = wrong("wrong-password", "password");
-  show(<ChangePassword />);
-  type("Present password", "not the one");
-  type("New password", "a new long password");
-  fireEvent.submit(screen.getByRole("form"));
-  expect(await screen.findByText("Not the right password.")).toBeTruthy();
-  expect(screen.getByLabelText("Present password").getAttribute("aria-invalid")).toBe("true");
-  expect(screen.getByLabelText<HTMLInputElement>("New password").value).toBe("a new long password");
 });

@@ -51,10 +51,13 @@ export function setAccountStage({ signedIn }: { signedIn: boolean }): AccountSta
     stage.answers = {};
     await act(() => session.signOut());
     act(() => queryClient.clear());
-    window.location.hash = "";
+    standAtHash("");
   });
   return stage;
 }
+
+/** What stands behind the # of the address, as if the page had been opened with it. */
+export const standAtHash = (hash: string) => window.history.replaceState(null, "", `#${hash}`);
 
 export const show = (screenful: ReactNode) =>
   render(<QueryClientProvider client={queryClient}>{screenful}</QueryClientProvider>);

@@ -1,8 +1,8 @@
 import { act, screen } from "@testing-library/react";
-import { refusal, setAccountStage, show } from "@/__tests__/client/accountStage";
+import { refusal, setAccountStage, show, standAtHash } from "@/__tests__/client/accountStage";
 import { session } from "@/features/api/session";
 import { ConfirmPage } from "./ConfirmPage";
-import { keptToken } from "./linkToken";
+import { keptTokens } from "@/features/api/keptTokens";
 
 jest.mock("expo-router", () => ({
   Link: ({ href, children }: { href: string; children: React.ReactNode }) => <a href={href}>{children}</a>,
@@ -15,8 +15,8 @@ const token = "c".repeat(43);
 const confirmed = () => ({ ...session.current().account!, confirmed: true, email: "maren@quay.example" });
 
 beforeEach(() => {
-  keptToken.clear();
-  window.location.hash = `#${token}`;
+  keptTokens.confirm.clear();
+  standAtHash(token);
 });
 
 it("confirms once, and the account of the page knows it", async () => {
@@ -25,7 +25,7 @@ it("confirms once, and the account of the page knows it", async () => {
   expect((await screen.findByTestId("confirmed")).textContent).toMatch(/maren@quay\.example is the address/);
   expect(stage.sent(asks)).toEqual([{ token }]);
   expect(session.current().account?.email).toBe("maren@quay.example");
-  expect(keptToken.read()).toBe("");
+  expect(keptTokens.confirm.read()).toBe("");
 });
 
 it("keeps the link while its owner signs in, then confirms by itself", async () => {
@@ -35,7 +35,7 @@ it("keeps the link while its owner signs in, then confirms by itself", async () 
   expect(screen.getByTestId("confirm-sign-in")).toBeTruthy();
   expect(stage.sent(asks)).toEqual([]);
   unmount();
-  window.location.hash = "";
+  standAtHash("");
   await act(() => session.signIn({ email: "maren@orlow.example", password: "tide tables 1907" }));
   show(<ConfirmPage />);
   expect(await screen.findByTestId("confirmed")).toBeTruthy();
@@ -46,7 +46,7 @@ it("says that a link does not work, and forgets it", async () => {
   stage.answers[asks] = refusal(410, "link-not-valid", "This link is used up.");
   show(<ConfirmPage />);
   expect(await screen.findByTestId("link-not-valid")).toBeTruthy();
-  expect(keptToken.read()).toBe("");
+  expect(keptTokens.confirm.read()).toBe("");
 });
 
 it("says whose the address is now, and offers no second try", async () => {

@@ -1,5 +1,5 @@
 import { screen } from "@testing-library/react";
-import { refusal, setAccountStage, show, submit, type, valueOf } from "@/__tests__/client/accountStage";
+import { refusal, setAccountStage, show, standAtHash, submit, type, valueOf } from "@/__tests__/client/accountStage";
 import { session } from "@/features/api/session";
 import { ResetForm } from "./ResetForm";
 
@@ -15,13 +15,13 @@ const token = "t".repeat(43);
 
 beforeEach(() => {
   mockSetParams.mockClear();
-  window.location.hash = `#${token}`;
+  standAtHash(token);
 });
 
 it("changes the password by the link, takes the token out of the address, and signs out here", async () => {
   stage.answers[asks] = { status: 204 };
   show(<ResetForm />);
-  expect(mockSetParams).toHaveBeenCalledWith({ "#": undefined });
+  expect(mockSetParams).toHaveBeenCalledWith({ "#": "" });
   type("New password", "harbour wall at seven");
   submit("New password");
   expect(await screen.findByTestId("reset-done")).toBeTruthy();
@@ -53,7 +53,7 @@ it("leads to a new link where this one is used up, and nobody is signed out for 
 });
 
 it("says so at once where the address holds no token", () => {
-  window.location.hash = "#";
+  standAtHash("");
   show(<ResetForm />);
   expect(screen.getByTestId("link-not-valid")).toBeTruthy();
 });

@@ -1,5 +1,5 @@
 import { fireEvent, screen } from "@testing-library/react";
-import { refusal, setAccountStage, show } from "@/__tests__/client/accountStage";
+import { refusal, setAccountStage, show, standAtHash } from "@/__tests__/client/accountStage";
 import { UnsubscribePage } from "./UnsubscribePage";
 
 jest.mock("expo-router", () => ({
@@ -11,7 +11,7 @@ const stage = setAccountStage({ signedIn: false });
 const asks = "POST /mail/unsubscribe?token=abc";
 
 beforeEach(() => {
-  window.location.hash = "#abc";
+  standAtHash("abc");
 });
 
 it("asks before it stops anything, then says which mails have ended", async () => {

@@ -21,11 +21,27 @@ const lines = () =>
   written
     .trim()
     .split("\n")
-    .map((line) => JSON.parse(line) as { level: number; req: object; res: object; err?: object });
+    .map(
+      (line) =>
+        JSON.parse(line) as { level: number; req: object; res: object; err?: object; user?: string; refusal?: string },
+    );
 
 it("writes one line for each request, with what was asked and answered", async () => {
   await request(server.app).get("/api/nothing?token=in-the-address").expect(404);
   expect(lines()).toMatchObject([{ level: 30, req: { method: "GET", path: "/api/nothing" }, res: { status: 404 } }]);
+});
+
+it("says which account asked, and why it was refused", async () => {
+  const person = await Person.put(server, "singer", true);
+  await person.get("/api/account").expect(200);
+  await person.get("/api/admin/users").expect(403);
+  await request(server.app).get("/api/account").expect(401);
+  const said = lines().map(({ user, refusal, res }) => [user, refusal, res]);
+  expect(said).toEqual([
+    [person.id, undefined, { status: 200 }],
+    [person.id, "not-allowed", { status: 403 }],
+    [undefined, "no-session", { status: 401 }],
+  ]);
 });
 
 it("writes no password, token, cookie, address or query, whether all goes well or not", async () => {

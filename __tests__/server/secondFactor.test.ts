@@ -45,6 +45,25 @@ describe("codes as a second step", () => {
     expect((row?.secret as Buffer).includes(Buffer.from(Secret.fromBase32(secret).bytes))).toBe(false);
   });
 
+  it("end all other sessions when they are switched on, and when they are switched off", async () => {
+    const person = await confirmed();
+    const elsewhere = async () => {
+      const { body } = await post("sign-in", { email: person.email, password });
+      return () => request(server.app).get("/api/account").set("Authorization", `Bearer ${body.accessToken}`);
+    };
+    const before = await elsewhere();
+    await before().expect(200);
+    const { secret } = (await person.post("/api/account/second-factor", { password }).expect(201)).body;
+    const on = await person.post("/api/account/second-factor/confirm", { code: codeOf(secret) }).expect(200);
+    await before().expect(401);
+    const { challenge } = (await post("sign-in", { email: person.email, password }).expect(202)).body;
+    const code = on.body.recoveryCodes[0];
+    const { accessToken } = (await post("second-step", { challenge, code }).expect(200)).body;
+    await person.post("/api/account/second-factor/off", { password, code: on.body.recoveryCodes[1] }).expect(204);
+    await request(server.app).get("/api/account").set("Authorization", `Bearer ${accessToken}`).expect(401);
+    await person.get("/api/account").expect(200);
+  });
+
   it("can be replaced by a recovery code, each once, and the owner is told", async () => {
     const { person, codes } = await withCodes();
     const { challenge } = (await post("sign-in", { email: person.email, password }).expect(202)).body;

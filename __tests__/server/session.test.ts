@@ -81,6 +81,31 @@ describe("the refresh token", () => {
     await post("refresh", person.cookie).expect(401);
   });
 
+  it("ends after ninety days however often it was used", async () => {
+    const person = await Person.signUp(server.app);
+    const begun = (days: number) =>
+      server.database.query("UPDATE sessions SET created_at = now() - make_interval(days => $2) WHERE user_id = $1", [
+        person.id,
+        days,
+      ]);
+    await begun(89);
+    const used = await post("refresh", person.cookie).expect(200);
+    const [row] = await server.database.query(
+      "SELECT expires_at < now() + interval '2 days' AS soon FROM sessions WHERE user_id = $1",
+      [person.id],
+    );
+    expect(row?.soon).toBe(true);
+    await begun(91);
+    const last = await post("refresh", cookieOf(used));
+    await post("refresh", cookieOf(last)).expect(401);
+  });
+
+  it("ends where the same browser signs in anew", async () => {
+    const person = await Person.signUp(server.app);
+    await post("sign-in", person.cookie).send({ email: person.email, password }).expect(200);
+    await person.get("/api/account").expect(401);
+  });
+
   it("is asked for: without one, or with an invented one, there is no session", async () => {
     for (const cookie of [undefined, "larkspan=", "larkspan=invented", "other=1"]) {
       expect((await post("refresh", cookie).expect(401)).body.code).toBe("no-session");
@@ -92,7 +117,7 @@ describe("the refresh token", () => {
 
 describe("the access token", () => {
   const ask = (token: string) => request(server.app).get("/api/account").set("Authorization", token);
-  const claims = (id: string) => ({ sub: id, sid: id, iss: "larkspan" });
+  const claims = (id: string) => ({ sub: id, sid: id, iss: "larkspan", aud: "api" });
   const encode = (part: object) => Buffer.from(JSON.stringify(part)).toString("base64url");
 
   it("is believed only when this server signed it, by the one algorithm, and it has not expired", async () => {
@@ -106,9 +131,10 @@ describe("the access token", () => {
       "of another issuer": `Bearer ${jwt.sign({ ...claims(id), iss: "somebody" }, tokenSecret)}`,
       "of another algorithm": `Bearer ${jwt.sign(claims(id), tokenSecret, { algorithm: "HS512" })}`,
       unsigned: `Bearer ${encode({ alg: "none", typ: "JWT" })}.${encode({ ...claims(id), exp: soon })}.`,
-      "without a session": `Bearer ${jwt.sign({ sub: id, iss: "larkspan" }, tokenSecret)}`,
+      "for somebody else": `Bearer ${jwt.sign({ ...claims(id), aud: "elsewhere" }, tokenSecret)}`,
+      "without a session": `Bearer ${jwt.sign({ sub: id, iss: "larkspan", aud: "api" }, tokenSecret)}`,
       "of a first step only": `Bearer ${signChallenge(tokenSecret, id)}`,
-      "for nobody": `Bearer ${jwt.sign({ iss: "larkspan" }, tokenSecret)}`,
+      "for nobody": `Bearer ${jwt.sign({ iss: "larkspan", aud: "api" }, tokenSecret)}`,
       "for no id": `Bearer ${jwt.sign(claims("1 OR 1=1"), tokenSecret)}`,
       "not a token": "Bearer nonsense",
       "of another scheme": `Basic ${token}`,

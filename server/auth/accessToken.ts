@@ -6,6 +6,8 @@ export const accessTokenLifeS = 600;
 export const challengeLifeS = 300;
 
 const issuer = "larkspan";
+/** Whom a token is for; one for the second step opens nothing else. */
+const api = "api";
 const secondStep = "second-step";
 const claims = z.object({ sub: z.uuid(), sid: z.uuid() });
 const challengeClaims = z.object({ sub: z.uuid() });
@@ -14,6 +16,7 @@ export function signAccessToken(secret: string, userId: string, sessionId: strin
   return jwt.sign({ sid: sessionId }, secret, {
     algorithm: "HS256",
     issuer,
+    audience: api,
     subject: userId,
     expiresIn: accessTokenLifeS,
   });
@@ -25,7 +28,7 @@ export function readAccessToken(given: string, secret: string): { userId: string
   const token = /^Bearer ([\w-]+\.[\w-]+\.[\w-]+)$/i.exec(given)?.[1];
   if (!token) throw notValid();
   try {
-    const { sub, sid } = claims.parse(jwt.verify(token, secret, { algorithms: ["HS256"], issuer }));
+    const { sub, sid } = claims.parse(jwt.verify(token, secret, { algorithms: ["HS256"], issuer, audience: api }));
     return { userId: sub, sessionId: sid };
   } catch (error) {
     throw error instanceof jwt.TokenExpiredError

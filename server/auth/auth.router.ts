@@ -72,6 +72,9 @@ export function authRoutes(api: Api, parts: AuthParts): void {
     const address = addressOf(req);
     if (await cancelErasure(dataSource, userId)) await log.note("erasure-cancelled", { userId, address });
     await log.note("signed-in", { userId, address });
+    // Whoever signs in anew from the same browser leaves no session behind that nobody holds.
+    const before = cookie.read(req);
+    if (before) await sessions.end(before);
     await answer(res, status, await sessions.begin(userId, deviceOf(req)));
   };
 

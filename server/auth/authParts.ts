@@ -40,7 +40,7 @@ export function authParts(dataSource: DataSource, settings: AuthSettings): AuthP
     tokens,
     accounts: new AccountsService(dataSource, tokens, passwords),
     sessions: new SessionsService(dataSource),
-    secondFactors: new SecondFactorService(dataSource, tokenSecret),
+    secondFactors: new SecondFactorService(dataSource, tokenSecret, passwords),
     limits: new TryLimits(dataSource),
     log: new SecurityLogService(dataSource, tokenSecret),
   };

@@ -38,9 +38,10 @@ function inFrontOf(permission: Permission, dataSource: DataSource, secret: strin
     );
     const [standing] = rows;
     if (!standing) throw noSession("Your session has ended. Sign in again.");
-    refuse(permission, standing);
+    // Before anything is refused, so that the log says to whom.
     setCurrentUserId(res, userId);
     setCurrentSessionId(res, sessionId);
+    refuse(permission, standing);
     next();
   };
 }

@@ -25,6 +25,16 @@ export class Passwords {
     return hash(canonical(password), { ...this.cost, type: argon2id, parallelism: 1 });
   }
 
+  /**
+   * A hash that a short secret can be found by: the same for the same text, salt and key, as 32 bytes.
+   *
+   * @param salt at least 8 bytes, another one for each person
+   * @param key without it nobody who has the database can try texts
+   */
+  keyed(text: string, { salt, key }: { salt: Buffer; key: string }): Promise<Buffer> {
+    return hash(text, { ...this.cost, type: argon2id, parallelism: 1, raw: true, salt, secret: Buffer.from(key) });
+  }
+
   async matches(storedHash: string | null, password: string): Promise<boolean> {
     // An unknown address must take as long as a wrong password, or the time would tell who has an account.
     const matches = await verify(storedHash ?? (await this.unknownAddress), canonical(password));

@@ -3,7 +3,11 @@ import type { DataSource, EntityManager } from "typeorm";
 import type { OpenSession } from "../../shared/contract/account";
 import { noSession } from "../http/httpProblem";
 
+/** How long a session may lie unused. */
 export const sessionLifeS = 30 * 24 * 3600;
+
+/** However much it is used, it ends after this, and the password is asked again. */
+const longestLifeS = 90 * 24 * 3600;
 
 /** Two tabs may send the same token at once; within these seconds the second is no thief. */
 const graceS = 10;
@@ -92,8 +96,11 @@ export class SessionsService {
     }
     await this.dataSource.query(
       `WITH forgotten AS (DELETE FROM refresh_tokens WHERE session_id = $1 AND used_at < now() - interval '7 days')
-       UPDATE sessions SET expires_at = now() + make_interval(secs => $2), last_used_at = now() WHERE id = $1`,
-      [held.session_id, sessionLifeS],
+       UPDATE sessions
+       SET expires_at = least(now() + make_interval(secs => $2), created_at + make_interval(secs => $3)),
+           last_used_at = now()
+       WHERE id = $1`,
+      [held.session_id, sessionLifeS, longestLifeS],
     );
     return { userId: held.user_id, sessionId: held.session_id, token: await this.issue(held.session_id) };
   }

@@ -36,6 +36,7 @@ export const errorHandler: ErrorRequestHandler = (error: unknown, req, res, next
   const answer =
     problem ?? new HttpProblem(500, "fault", "Something went wrong on our side. Nothing of yours was changed.");
   if (answer.status === 401) res.set("WWW-Authenticate", "Bearer");
+  res.locals.refusal = answer.code;
   res.set(answer.headers).status(answer.status).json(answer.toBody());
 };
 

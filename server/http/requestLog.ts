@@ -1,4 +1,4 @@
-import type { RequestHandler } from "express";
+import type { RequestHandler, Response } from "express";
 import { type Logger, pino } from "pino";
 import { pinoHttp } from "pino-http";
 
@@ -13,7 +13,7 @@ interface LoggedError {
   code?: string;
 }
 
-/** One line for each request. Headers, bodies and the parameters of queries, which hold secrets, are never written. */
+/** One line for each request: when, what, by which account, and what became of it. Headers, bodies and the parameters of queries, which hold secrets, are never written. */
 export function requestLog(logger: Logger): RequestHandler {
   return pinoHttp({
     logger,
@@ -25,6 +25,11 @@ export function requestLog(logger: Logger): RequestHandler {
       }),
       res: (res: { statusCode: number }) => ({ status: res.statusCode }),
       err: ({ type, message, stack, code }: LoggedError) => ({ type, message, stack, code }),
+    },
+    // Who was served or refused, and why.
+    customProps: (_req, res) => {
+      const { userId: user, refusal } = (res as Response).locals as { userId?: string; refusal?: string };
+      return { user, refusal };
     },
     customLogLevel: (_req, res, error) => (error || res.statusCode >= 500 ? "error" : "info"),
   });

@@ -23,7 +23,7 @@ export function securityHeaders(secure: boolean, soundOrigin: string): RequestHa
           workerSrc: own,
           fontSrc: own,
           objectSrc: ["'none'"],
-          baseUri: own,
+          baseUri: ["'none'"],
           formAction: own,
           frameAncestors: ["'none'"],
         },

@@ -8,7 +8,7 @@ import {
   secondFactorSetup,
 } from "../../../shared/contract/account";
 import type { Api } from "../../http/api";
-import { currentUserId } from "../../http/currentUser";
+import { currentSessionId, currentUserId } from "../../http/currentUser";
 import { HttpProblem } from "../../http/httpProblem";
 import { parse } from "../../http/parse";
 import { addressOf, type AuthParts, tellOwner } from "../authParts";
@@ -22,7 +22,7 @@ const wrong = { description: "The password (wrong-password) or the code (wrong-c
 
 /** Codes of an authenticator app as a second step of signing in. */
 export function secondFactorRoutes(api: Api, parts: AuthParts): void {
-  const { dataSource, accounts, secondFactors, limits, log } = parts;
+  const { dataSource, accounts, secondFactors, sessions, limits, log } = parts;
 
   const checkPassword = async (userId: string, password: string, address: string) => {
     await limits.countPassword(userId, address);
@@ -76,7 +76,7 @@ export function secondFactorRoutes(api: Api, parts: AuthParts): void {
       method: "post",
       path: "/account/second-factor/confirm",
       tag,
-      summary: "Switch codes on, by a first one",
+      summary: "Switch codes on, by a first one; ends all other sessions",
       signedIn: true,
       body: { name: "Code", schema: codeRequest },
       answers: { 200: { description: "On. The recovery codes, this once.", schema: codes }, 403: wrong, 429: tooMany },
@@ -88,6 +88,7 @@ export function secondFactorRoutes(api: Api, parts: AuthParts): void {
       await limits.countCode(userId, address);
       const made = await secondFactors.confirm(userId, code);
       await limits.forgiveCode(userId, address);
+      await sessions.endAll(userId, { except: currentSessionId(res) });
       await log.note("second-factor-on", { userId, address });
       await tellOwner(dataSource, await accounts.person(userId), "second-factor-on");
       res.json({ recoveryCodes: made } satisfies RecoveryCodes);
@@ -99,7 +100,7 @@ export function secondFactorRoutes(api: Api, parts: AuthParts): void {
       method: "post",
       path: "/account/second-factor/off",
       tag,
-      summary: "Sign in without codes again",
+      summary: "Sign in without codes again; ends all other sessions",
       signedIn: true,
       body: both,
       answers: {
@@ -120,6 +121,7 @@ export function secondFactorRoutes(api: Api, parts: AuthParts): void {
       await dataSource.transaction(async (manager) => {
         if (!(await secondFactors.use(userId, code, manager))) throw wrongCode();
         await secondFactors.off(manager, userId);
+        await sessions.endAll(userId, { except: currentSessionId(res), connection: manager });
         await log.note("second-factor-off", { userId, address }, manager);
         await tellOwner(manager, person, "second-factor-off");
       });

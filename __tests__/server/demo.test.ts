@@ -4,6 +4,10 @@ import type { z } from "zod";
 import { decision } from "../../shared/contract/decision";
 import { ownInstrument } from "../../shared/contract/instrument";
 import { song } from "../../shared/contract/song";
+import { assignmentListing, partListing } from "../../shared/contract/studio/assignment";
+import { studioGroup } from "../../shared/contract/studio/group";
+import { rosterRow } from "../../shared/contract/studio/roster";
+import { studio as studioSchema } from "../../shared/contract/studio/studio";
 import { songVersionEntry } from "../../shared/contract/songVersion";
 import { take } from "../../shared/contract/take";
 import { voice } from "../../shared/contract/voice";
@@ -76,10 +80,41 @@ it("gives everybody of the class a voice, takes, the songs, keys for two of them
   }
 });
 
+it("gives the teacher a studio: a roster as the contract says, groups, a shared key, songs given and how takes felt", async () => {
+  await loadDemoScenario(dataSource);
+  const people = await demoSignIns(dataSource);
+  const studiosOf = async (name: string) => {
+    const { email, password } = people.find((person) => person.name === name)!;
+    const list = await signIn(email, password);
+    const [studio] = await list("studios", studioSchema);
+    return { list, studio: studio! };
+  };
+  const { list, studio } = await studiosOf("Ruth Callow");
+  expect(studio).toMatchObject({ event: { date: "2026-12-10" }, counts: { pupils: 11, waiting: 0 } });
+  const rows = await list(`studios/${studio.id}/roster`, rosterRow);
+  const shown = rows.filter(({ voice, instrument }) => voice && instrument).map(({ name }) => name);
+  expect(shown).toHaveLength(9);
+  expect(rows.filter(({ consent }) => consent.waitsForGuardian).map(({ name }) => name)).toEqual(["Cass Wether"]);
+  expect(rows.find(({ name }) => name === "Joss Pell")?.warnings).toContain("voice is changing: measure again");
+  expect(rows.find(({ name }) => name === "Ines Mallory")).toMatchObject({
+    lastTake: { effort: 5 },
+    warnings: ["very hard last time"],
+  });
+  const groups = await list(`studios/${studio.id}/groups`, studioGroup);
+  expect(groups.map(({ name }) => name)).toEqual(["High voices", "Low voices", "Finale"]);
+  expect(groups[2]?.keys).toHaveLength(1);
+  const given = await list(`studios/${studio.id}/assignments`, assignmentListing);
+  expect(given.map(({ counts }) => counts.parts).sort()).toEqual([11, 2]);
+  const { list: listOfMaren } = await studiosOf("Maren Oake");
+  const [part] = await listOfMaren("parts", partListing);
+  expect((await listOfMaren("songs", song)).map(({ id }) => id)).toContain(part?.songId);
+});
+
 it("is loaded once, also when three servers start on the same empty database", async () => {
   await Promise.all([1, 2, 3].map(() => loadDemoScenario(dataSource)));
   await loadDemoScenario(dataSource);
-  expect(await counts()).toEqual({ users: 3, songs: 3 * demoSongs.length, takes: 5 });
+  // Three whom one can be, with all songs, and nine pupils with the one that they were given.
+  expect(await counts()).toEqual({ users: 12, songs: 3 * demoSongs.length + 9, takes: 5 + 12 });
 });
 
 it("stays out of a database that somebody uses", async () => {

@@ -7,7 +7,9 @@ import type { Take } from "../../shared/contract/take";
 import type { Voice } from "../../shared/contract/voice";
 import { presets } from "../../shared/instruments/presets";
 import { scoreKeys } from "../../shared/keys/scoreKeys";
+import { keyVoiceOf } from "../../shared/keys/singingVoiceOf";
 import { chartChords, parseChart } from "../../shared/songs/chart";
+import type { DemoSong } from "../../shared/songs/demo/demoSong";
 import { demoSongs } from "../../shared/songs/demoSongs";
 import { readMelodyFile } from "../../shared/songs/melodyFile";
 import { mergeTakes } from "../../shared/voice/voiceProfile";
@@ -22,6 +24,8 @@ import { TakeEntity } from "../voices/take.entity";
 import { VoiceEntity } from "../voices/voice.entity";
 import { bringDemoVersions } from "./demoVersions";
 import { demoPassword, demoPeople, type DemoPerson } from "./demoPeople";
+import { demoPupils } from "./demoPupils";
+import { type InClass, openDemoStudio } from "./demoStudio";
 
 /** How to get into the accounts of the demonstration. */
 export interface DemoSignIn {
@@ -39,7 +43,16 @@ export async function loadDemoScenario(dataSource: DataSource): Promise<void> {
     // Another server may be starting on the same empty database.
     await manager.query("LOCK TABLE users IN SHARE ROW EXCLUSIVE MODE");
     if (await manager.createQueryBuilder(UserEntity, "user").getExists()) return;
-    for (const person of demoPeople) await move(manager, person, passwordHash);
+    const people: InClass[] = [];
+    for (const person of demoPeople) people.push(await move(manager, person, { passwordHash }));
+    for (const { birthYear, ...pupil } of demoPupils) {
+      // Nobody signs in as one of them, and their shelves hold what the teacher gave.
+      const brought = await move(manager, pupil, { passwordHash: "none", birthYear, songs: demoSongs.slice(0, 1) });
+      people.push({ ...brought, pupil });
+    }
+    const teacher = people.find(({ name }) => name === "Ruth Callow");
+    const pupils = people.filter((each) => each !== teacher);
+    if (teacher) await openDemoStudio(manager, teacher, pupils);
   });
 }
 
@@ -55,14 +68,25 @@ export async function demoSignIns(dataSource: DataSource): Promise<DemoSignIn[]>
     .map(({ name, role, email }) => ({ name, role, email, password: demoPassword }));
 }
 
+interface Moving {
+  passwordHash: string;
+  birthYear?: number | null;
+  songs?: readonly DemoSong[];
+}
+
 /** Brings one person in, with everything that is theirs. */
-async function move(manager: EntityManager, person: DemoPerson, passwordHash: string): Promise<void> {
+async function move(
+  manager: EntityManager,
+  person: DemoPerson,
+  { passwordHash, birthYear = 1986, songs: brings = demoSongs }: Moving,
+): Promise<InClass> {
   const userId = randomUUID();
   await manager.insert(UserEntity, {
     id: userId,
     email: person.email,
     passwordHash,
     role: person.role,
+    birthYear,
     confirmedAt: new Date(),
   });
 
@@ -70,7 +94,7 @@ async function move(manager: EntityManager, person: DemoPerson, passwordHash: st
   const voice: Voice = { id: randomUUID(), name: person.voice, byHand: null, createdAt };
   const takes = person.takes.map((take) => toTake(voice.id, take));
   const instrument = toInstrument(person.instrument);
-  const songs = demoSongs.map((demo) => toSong(demo, createdAt));
+  const songs = brings.map((demo) => toSong(demo, createdAt));
   await manager.insert(VoiceEntity, { ...voice, userId });
   await manager.insert(
     TakeEntity,
@@ -88,6 +112,17 @@ async function move(manager: EntityManager, person: DemoPerson, passwordHash: st
     DecisionEntity,
     decisions.map((decision) => ({ ...decision, userId })),
   );
+  const sings = keyVoiceOf(voice, takes);
+  if (!sings) throw new RangeError(`${person.name} sang nothing.`);
+  return {
+    userId,
+    name: person.name,
+    voice: sings,
+    instrument,
+    songs,
+    decisions,
+    pupil: { agrees: true, lastTake: null },
+  };
 }
 
 function toTake(

@@ -144,6 +144,14 @@ it("leaves whoever is in the studio already where they are, and the link unused"
   await look(token).expect(200);
 });
 
+it("accepted with the word that teachers may see needs the birth year first, and is not used up by the asking", async () => {
+  const { token } = await invited();
+  const person = await Person.put(server, "singer", true);
+  expect((await accept(person, token, { agree: true }).expect(409)).body.code).toBe("birth-year-needed");
+  await person.put("/api/account/person", { birthYear: 1980, country: "DE" }).expect(200);
+  expect((await accept(person, token, { agree: true }).expect(201)).body.me.consent.shares).toBe(true);
+});
+
 it("puts a pupil into the group it names, and only into one of the same studio", async () => {
   const group = (await teacher.post(`/api/studios/${studioId}/groups`, { name: "Altos", memberIds: [] })).body;
   const { token } = await invited(anAddress(), { groupId: group.id });

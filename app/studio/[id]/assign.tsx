@@ -1,15 +1,14 @@
-import { useQueries, useQuery } from "@tanstack/react-query";
+import { useQuery } from "@tanstack/react-query";
 import { useLocalSearchParams, useRouter } from "expo-router";
 import { useMemo } from "react";
 import { SignedIn } from "@/features/account/SignedIn";
 import { instrumentOf } from "@/features/instruments/myInstruments";
 import { songPiece } from "@/features/keys/songKeys";
 import { songQueries } from "@/features/songs/songQueries";
-import { AssignScreen, type UseWays, type WantedWays } from "@/features/studio/assign/AssignScreen";
+import { AssignScreen } from "@/features/studio/assign/AssignScreen";
 import { StudioPage } from "@/features/studio/StudioPage";
 import { QueryState } from "@/features/ui/QueryState";
-import { wayQueries } from "@/features/ways/wayQueries";
-import { usualWishes } from "@/features/ways/wishes/wishes";
+import { useWaysOfMany } from "@/features/ways/useWaysOfMany";
 import type { Studio } from "@/shared/contract/studio/studio";
 
 export default function AssignRoute() {
@@ -47,19 +46,10 @@ function Assign({ studio }: { studio: Studio }) {
           piece={piece}
           asked={asked.key !== undefined && /^[A-G][#b]?$/.test(asked.key) ? asked.key : null}
           group={asked.group ?? null}
-          useWays={useWays}
+          useWays={useWaysOfMany}
           instrumentOf={instrumentOf}
         />
       )}
     </QueryState>
   );
-}
-
-const useWays: UseWays = (wanted) =>
-  useQueries({
-    queries: wanted.map(({ playing, to }) => wayQueries.into(playing && playingOf(playing), to)),
-  }).map(({ data, error }, k) => data ?? (wanted[k]?.playing && !error ? undefined : null));
-
-function playingOf({ piece: { chords, sequence, written }, instrument, wishes }: WantedWays) {
-  return { chords, sequence, from: written, instrument, wishes: wishes ?? usualWishes };
 }

@@ -7,17 +7,13 @@ import { Dialog } from "@/features/ui/Dialog";
 import { Field } from "@/features/ui/Field";
 import { Select } from "@/features/ui/Select";
 import { Text } from "@/features/ui/Text";
+import { fonts } from "@/features/ui/theme";
 import { glyphs, noteName } from "@/shared/music/pitch";
-import type { Way } from "@/shared/ways/way";
+import { Tick } from "../PupilTicks";
 import { bandWords, pictureVoice, silence } from "../roster/rosterWords";
 import { fitTone, fitWords } from "./fitWords";
-import { partWay, wayMark, type PartDraft, type PupilPart } from "./pupilParts";
-
-export interface PartCellProps {
-  part: PupilPart;
-  ways: readonly Way[] | null | undefined;
-  onDraft: (memberId: string, draft: Partial<PartDraft>) => void;
-}
+import type { PartCellProps } from "./assignRows";
+import { partWay, wayMark, type PupilPart } from "./pupilParts";
 
 const note = (midi: number) => glyphs(noteName(Math.round(midi)));
 
@@ -126,5 +122,28 @@ export function PartNote({ part: { row, draft }, onDraft }: Omit<PartCellProps, 
         </Dialog>
       )}
     </>
+  );
+}
+
+/** Whether a pupil gets the song. */
+export function GiveTick({ part: { row, draft }, onDraft }: Omit<PartCellProps, "ways">) {
+  return (
+    <label style={{ display: "flex", width: 40, height: 48, alignItems: "center" }}>
+      <Tick
+        label={`Give it to ${row.name}`}
+        on={draft.chosen}
+        onChange={(chosen) => onDraft(row.memberId, { chosen })}
+        testID={`give-${row.memberId}`}
+      />
+    </label>
+  );
+}
+
+/** The score in a key that is the same for all. */
+export function OneKey({ part: { key } }: { part: PupilPart }) {
+  return (
+    <Text variant="strong" style={{ fontFamily: fonts.display }}>
+      {key.judged ? String(Math.round(key.judged.score)) : "–"}
+    </Text>
   );
 }

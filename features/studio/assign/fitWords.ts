@@ -1,15 +1,13 @@
 import type { PupilKey } from "../judge/judgePupils";
 
-const semitones = (count: number) => `${count} ${count === 1 ? "semitone" : "semitones"}`;
-
-/** How a tune lies in a voice, short: "comfortable, 3 left above", "top 2 in reach", "leaves the range by 2 above". */
+/** How a tune lies in a voice, in semitones: "comfortable, 3 left above", "top 3 in reach, 1 left above", "2 above the range". */
 export function fitWords({ fit, over, above, under, below }: PupilKey): string {
   if (fit === "comfort") return `comfortable, ${above} left above`;
   const words: string[] = [];
-  if (above < 0) words.push(`${semitones(-above)} above the range`);
+  if (above < 0) words.push(`${-above} above the range`);
   else if (over > 0) words.push(`top ${over} in reach, ${above} left above`);
-  if (below < 0) words.push(`${semitones(-below)} below the range`);
-  else if (under > 0) words.push(`lowest ${under} in reach`);
+  if (below < 0) words.push(`${-below} below the range`);
+  else if (under > 0) words.push(`lowest ${under} in reach, ${below} left below`);
   return words.join("; ");
 }
 

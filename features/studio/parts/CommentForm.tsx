@@ -8,7 +8,7 @@ import { FormField } from "@/features/ui/form/FormField";
 import { LiveText } from "@/features/ui/LiveText";
 import { useStudioRefresh } from "../studioQueries";
 import { clockWords } from "./clockWords";
-import type { TakeTime } from "./PartScreen";
+import type { TakeTime } from "./takesPlace";
 
 export interface CommentFormProps {
   partId: string;

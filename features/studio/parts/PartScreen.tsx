@@ -2,25 +2,11 @@ import { useState, type ReactNode } from "react";
 import { View } from "react-native";
 import { Notice } from "@/features/ui/Notice";
 import { useLayout } from "@/features/ui/useLayout";
-import type { Comment, Part } from "@/shared/contract/studio/assignment";
+import type { Part } from "@/shared/contract/studio/assignment";
 import { AnswerCard } from "./AnswerCard";
+import type { TakesPlace, TakeTime } from "./takesPlace";
 import { KeyCard } from "./KeyCard";
 import { Thread } from "./Thread";
-
-/** A place in a take. */
-export interface TakeTime {
-  handInId: string;
-  atS: number;
-}
-
-/** What the takes of a part need from the page around them. */
-export interface TakesPlace {
-  part: Part;
-  /** those that stand at a time in a take are shown there */
-  comments: readonly Comment[];
-  /** a time was chosen, to write something there; null: let go */
-  onTime: (time: TakeTime | null) => void;
-}
 
 export interface PartScreenProps {
   part: Part;

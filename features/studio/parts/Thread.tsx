@@ -1,14 +1,19 @@
 import { useQuery } from "@tanstack/react-query";
+import type { ReactNode } from "react";
 import { View } from "react-native";
 import { Heading } from "@/features/ui/Heading";
 import { QueryState } from "@/features/ui/QueryState";
 import { Text } from "@/features/ui/Text";
+import type { Part } from "@/shared/contract/studio/assignment";
 import { studioQueries } from "../studioQueries";
 import { CommentForm } from "./CommentForm";
 import { CommentRow } from "./CommentRow";
-import type { PartScreenProps, TakeTime } from "./PartScreen";
+import type { TakesPlace, TakeTime } from "./takesPlace";
 
-export interface ThreadProps extends Pick<PartScreenProps, "part" | "now" | "takes"> {
+export interface ThreadProps {
+  part: Part;
+  now: Date;
+  takes: (place: TakesPlace) => ReactNode;
   time: TakeTime | null;
   onTime: (time: TakeTime | null) => void;
 }

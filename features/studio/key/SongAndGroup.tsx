@@ -1,0 +1,62 @@
+import { View } from "react-native";
+import { EmptyState } from "@/features/ui/EmptyState";
+import { LinkButton } from "@/features/ui/LinkButton";
+import { Notice } from "@/features/ui/Notice";
+import { Select } from "@/features/ui/Select";
+import { useLayout } from "@/features/ui/useLayout";
+import type { StudioGroup } from "@/shared/contract/studio/group";
+import type { Piece } from "../judge/piece";
+
+export interface SongAndGroupProps {
+  songs: readonly { id: string; title: string }[];
+  songId: string | null;
+  onSong: (id: string) => void;
+  piece: Piece | null;
+  groups: readonly StudioGroup[];
+  groupId: string | null;
+  onGroup: (id: string | null) => void;
+}
+
+/** Which song, and who sings it together. */
+export function SongAndGroup({ songs, songId, onSong, piece, groups, groupId, onGroup }: SongAndGroupProps) {
+  const phone = useLayout() === "phone";
+  if (songs.length === 0)
+    return (
+      <EmptyState
+        title="Your shelf is empty"
+        text="Keys are found for songs of your own shelf. Add one first."
+        action={<LinkButton label="Add a song" href="/songs/new" />}
+      />
+    );
+  const half = phone ? null : { flexGrow: 1, flexBasis: 0, maxWidth: 420 };
+  return (
+    <View style={{ gap: 12 }}>
+      <View style={{ flexDirection: phone ? "column" : "row", gap: 12 }}>
+        <View style={half}>
+          <Select
+            label="Song, from your shelf"
+            options={[
+              ...(songId === null ? [{ value: "", label: "Choose a song" }] : []),
+              ...songs.map(({ id, title }) => ({ value: id, label: title })),
+            ]}
+            value={songId ?? ""}
+            onChange={(id) => id !== "" && onSong(id)}
+            testID="key-song"
+          />
+        </View>
+        <View style={half}>
+          <Select
+            label="Who sings it"
+            options={[{ value: "", label: "Everybody" }, ...groups.map(({ id, name }) => ({ value: id, label: name }))]}
+            value={groupId ?? ""}
+            onChange={(id) => onGroup(id === "" ? null : id)}
+            testID="key-group"
+          />
+        </View>
+      </View>
+      {songId !== null && piece === null && (
+        <Notice kind="caution">This song has no key yet. Open it and say in which key it is written.</Notice>
+      )}
+    </View>
+  );
+}

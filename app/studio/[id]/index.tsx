@@ -1,17 +1,21 @@
 import { useLocalSearchParams, useRouter } from "expo-router";
 import { useMemo } from "react";
 import { SignedIn } from "@/features/account/SignedIn";
+import { writtenKeyOf } from "@/features/keys/songKeys";
 import { PupilStudio } from "@/features/studio/home/PupilStudio";
+import { LatestSongKeys } from "@/features/studio/key/LatestSongKeys";
 import { RosterActions } from "@/features/studio/roster/RosterActions";
 import { RosterScreen } from "@/features/studio/roster/RosterScreen";
 import { readRosterView, rosterParams, type RosterView } from "@/features/studio/roster/rosterView";
 import { studioFacts, voicesTitle } from "@/features/studio/roster/rosterWords";
 import { StudioPage, teaches } from "@/features/studio/StudioPage";
+import { useLayout } from "@/features/ui/useLayout";
 
 export default function RosterRoute() {
   const { id, ...params } = useLocalSearchParams<{ id: string } & Partial<Record<keyof RosterView, string>>>();
   const router = useRouter();
   const now = useMemo(() => new Date(), []);
+  const wide = useLayout() === "wide";
   const view = readRosterView(params);
   return (
     <StudioPage
@@ -34,7 +38,9 @@ export default function RosterRoute() {
           view={view}
           onView={(change) => router.setParams(rosterParams({ ...view, ...change }))}
           now={now}
-        />
+        >
+          {wide && <LatestSongKeys studioId={studio.id} writtenOf={writtenKeyOf} />}
+        </RosterScreen>
       )}
     </StudioPage>
   );

@@ -1,6 +1,5 @@
 import { memo, useMemo, type CSSProperties } from "react";
 import { useWindowDimensions } from "react-native";
-import type { Scale } from "@/features/span/ladderGeometry";
 import { SpanScale } from "@/features/span/SpanScale";
 import { stripX } from "@/features/span/VoiceStrip";
 import { colors, fonts, sizes } from "@/features/ui/theme";

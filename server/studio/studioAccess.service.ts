@@ -7,7 +7,7 @@ import { consentColumns, type ConsentRow, splitConsent } from "./consent/memberC
 type Connection = DataSource | EntityManager;
 
 /** Somebody's present place in a studio. */
-export interface Membership {
+interface Membership {
   memberId: string;
   studioId: string;
   userId: string;

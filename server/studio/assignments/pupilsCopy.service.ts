@@ -6,7 +6,7 @@ import { decisionsOf } from "../../keys/decisions.service";
 import { songsOf } from "../../songs/songs.service";
 
 /** How a pupil is to have a song. */
-export interface GivenKey {
+interface GivenKey {
   tonic: string;
   shift: number;
   score: number | null;

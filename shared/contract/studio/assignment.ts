@@ -9,7 +9,7 @@ const day = z.iso.date("Give the day as in 2026-12-10.");
 const words = z.string().trim().max(2000, "At most 2,000 characters.");
 
 /** The song as it was when it was given. */
-export const givenSong = song.pick({
+const givenSong = song.pick({
   title: true,
   chart: true,
   writtenKey: true,
@@ -52,11 +52,11 @@ export const assignmentRequest = z.strictObject({
 });
 export type AssignmentRequest = z.infer<typeof assignmentRequest>;
 
-export const partState = z.enum(["assigned", "handed-in", "returned", "accepted"]);
+const partState = z.enum(["assigned", "handed-in", "returned", "accepted"]);
 export type PartState = z.infer<typeof partState>;
 
 /** A pupil's part of an assignment, as its teachers see it in a table. Without consent only the name tells something. */
-export const partRow = z.strictObject({
+const partRow = z.strictObject({
   id: z.uuid(),
   memberId: z.uuid(),
   pupil: z.string(),

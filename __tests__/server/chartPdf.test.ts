@@ -130,7 +130,7 @@ it("lets one address print sixty in a minute, and then says how long to wait", a
 });
 
 const sheet = {
-  ...{ title: "Gulls in B♭", facts: "", chart, singer: "Maren", firstNote: "F4", strokes: null },
+  ...{ title: "Gulls in B♭", facts: "", chart, singer: "Maren", firstNote: "F4", strokes: null, tune: null, order: "" },
   from: { tonic: "Bb", mode: "minor" },
   key: { tonic: "C", mode: "minor" },
   instrument: {

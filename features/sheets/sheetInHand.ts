@@ -6,8 +6,9 @@ import { keyFifths, type KeyName } from "@/shared/music/keyName";
 import { keySign, movedKey } from "@/shared/music/keyWords";
 import { shortMove } from "@/shared/music/moveWords";
 import { glyphs, noteName } from "@/shared/music/pitch";
-import type { Sheet, SheetStrokes } from "@/shared/sheets/sheet";
+import type { Sheet, SheetStrokes, SheetTune } from "@/shared/sheets/sheet";
 import { chartChords, parseChart } from "@/shared/songs/chart";
+import { partOrder } from "@/shared/songs/partOrder";
 import type { WayAddress, WayMoves } from "@/shared/ways/askedWay";
 import type { Shape, Way } from "@/shared/ways/way";
 
@@ -51,10 +52,12 @@ export interface SheetParts {
   way: Way | null;
   /** whose shapes and strokes it shows; null for the way's own */
   arrangement: SheetArrangement | null;
+  /** where it lies in the singer's voice; null where that is not known */
+  tune: SheetTune | null;
 }
 
 /** Everything that stands on the paper. */
-export function sheetOf({ song, key, shift, singer, instrument, way, arrangement }: SheetParts): Sheet {
+export function sheetOf({ song, key, shift, singer, instrument, way, arrangement, tune }: SheetParts): Sheet {
   const from = key && writtenKey(song);
   const first = song.tune?.kind === "melody" ? song.tune.notes[0] : undefined;
   const strings = instrument.strings.map(({ note }) => note);
@@ -84,6 +87,8 @@ export function sheetOf({ song, key, shift, singer, instrument, way, arrangement
       return { written, sounding, played, shape: arranged ? arranged.shape : shape };
     }),
     strokes: arrangement?.strokes ?? null,
+    tune,
+    order: partOrder(song.chart),
   };
 }
 

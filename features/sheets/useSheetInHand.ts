@@ -2,6 +2,7 @@ import { useMemo } from "react";
 import type { Song } from "@/shared/contract/song";
 import type { Instrument } from "@/shared/instruments/instrument";
 import type { KeyName } from "@/shared/music/keyName";
+import type { SheetTune } from "@/shared/sheets/sheet";
 import { askedWay, wayAddress, type WayMoves } from "@/shared/ways/askedWay";
 import type { Way } from "@/shared/ways/way";
 import { keyChoices, sheetOf, writtenKey, type SheetArrangement, type SheetParams } from "./sheetInHand";
@@ -18,13 +19,15 @@ export interface SheetInHandOptions {
   kept: WayMoves | null;
   /** kept arrangements of the song in this key on this instrument */
   arrangements?: readonly SheetArrangement[];
+  /** where it lies in the singer's voice */
+  tune?: SheetTune | null;
   /** changes what the address asks for */
   ask: (change: SheetParams) => void;
 }
 
 /** The sheet of a song in a key on an instrument, and what may be chosen instead. */
 export function useSheetInHand(from: SheetInHandOptions) {
-  const { song, key, shift, singer, instrument, ways, asked, kept, arrangements = [], ask } = from;
+  const { song, key, shift, singer, instrument, ways, asked, kept, arrangements = [], tune = null, ask } = from;
   const way = useMemo(() => askedWay(ways ?? [], asked, kept), [ways, asked, kept]);
   const fitting = way ? arrangements.filter((each) => idOf(each.way) === idOf(way)) : [];
   const arrangement = fitting.find(({ id }) => id === asked.arrangement) ?? null;
@@ -33,8 +36,8 @@ export function useSheetInHand(from: SheetInHandOptions) {
   const { tonic, mode } = key;
   const sheet = useMemo(() => {
     const sounding = keyed ? { tonic, mode } : null;
-    return sheetOf({ song, key: sounding, shift, singer, instrument, way, arrangement });
-  }, [song, keyed, tonic, mode, shift, singer, instrument, way, arrangement]);
+    return sheetOf({ song, key: sounding, shift, singer, instrument, way, arrangement, tune });
+  }, [song, keyed, tonic, mode, shift, singer, instrument, way, arrangement, tune]);
   const keys = written === null ? [] : keyChoices(written, shift);
   const now = {
     ...(written === null ? null : { key: tonic, shift: String(shift) }),

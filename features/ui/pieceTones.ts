@@ -1,5 +1,5 @@
 import type { SheetTone } from "@/shared/sheets/sheetPiece";
-import { colors } from "./theme";
+import { colors, mixtures } from "./theme";
 
 /** The tones of drawn pieces on the page, which follow the light. */
 export const pieceTones: Record<SheetTone, string> = {
@@ -8,6 +8,8 @@ export const pieceTones: Record<SheetTone, string> = {
   line: colors.line,
   plum: colors.plum,
   lagoon: colors.lagoon,
+  comfort: mixtures.tint,
+  reach: colors.honey,
   paper: colors.paper,
   onPlum: colors.onPlum,
 };

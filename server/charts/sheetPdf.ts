@@ -13,6 +13,8 @@ const colors: Record<SheetTone, string> = {
   line: "#E3DACB",
   plum: "#6A2C70",
   lagoon: "#1F7A74",
+  comfort: "#E1EFEE",
+  reach: "#B9770E",
   paper: "#FFFFFF",
   onPlum: "#FFFFFF",
 };

@@ -1,4 +1,5 @@
 import { z } from "zod";
+import { pitchBand } from "./pitchBand";
 import { shape } from "./shape";
 import { song, tonicName } from "./song";
 
@@ -49,6 +50,19 @@ const sheet = z.strictObject({
       words: z.string().max(300),
     })
     .nullable(),
+  tune: z
+    .strictObject({
+      range: pitchBand,
+      comfort: pitchBand,
+      comfortNames: z.strictObject({ low: z.string().max(8), high: z.string().max(8) }),
+      marks: z
+        .array(z.strictObject({ midi: z.number().min(0).max(127), share: z.number().min(0).max(1) }))
+        .min(1)
+        .max(128),
+      words: z.string().max(600),
+    })
+    .nullable(),
+  order: z.string().max(2000),
 });
 
 /** How a sheet is laid out; also kept on the device as the player's own habit. */

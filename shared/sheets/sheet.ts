@@ -1,4 +1,5 @@
 import type { KeyName } from "../music/keyName";
+import type { PitchBand } from "../voice/takeReport";
 import type { Shape } from "../ways/way";
 
 /** A chord of the song as this player plays it. */
@@ -48,6 +49,18 @@ export interface SheetInstrument {
   shapeKey: KeyName;
 }
 
+/** Where the tune lies in the singer's voice, in the sheet's key. */
+export interface SheetTune {
+  range: PitchBand;
+  comfort: PitchBand;
+  /** ends of the comfort band with octaves, with glyphs */
+  comfortNames: { low: string; high: string };
+  /** whole semitones from low to high, with their share of the sung time, 0 to 1 */
+  marks: { midi: number; share: number }[];
+  /** how it sits, in a sentence or two */
+  words: string;
+}
+
 /** A chart prepared in the chosen key for one player: everything that stands on the paper. Plain data. */
 export interface Sheet {
   title: string;
@@ -67,6 +80,10 @@ export interface Sheet {
   instrument: SheetInstrument | null;
   chords: SheetChord[];
   strokes: SheetStrokes | null;
+  /** null where tune or voice is not known */
+  tune: SheetTune | null;
+  /** the parts in the order they are played, as a sentence; "" where there is nothing to keep in mind */
+  order: string;
 }
 
 /** How the sheet is to be laid out. */

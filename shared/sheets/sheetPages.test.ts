@@ -48,6 +48,14 @@ const chart = fc.array(part, { minLength: 1, maxLength: 8 }).map((parts) => part
 
 const shape = { frets: [0, 2, 3], fingers: [0, 1, 2], barre: null, reachMm: 60, ease: 0.8, roots: [1] };
 
+const tune = {
+  range: { lowMidi: 53, highMidi: 74 },
+  comfort: { lowMidi: 57, highMidi: 71 },
+  comfortNames: { low: "A3", high: "B4" },
+  marks: [60, 62, 64, 69].map((midi) => ({ midi, share: 0.25 })),
+  words: "All of it sits in your comfort band. 5 semitones of room above.",
+};
+
 /** A song in G that sounds in B flat, on a box guitar with its capo at the third fret. */
 function sheetOf(text: string): Sheet {
   const from = { tonic: "G", mode: "major" } as const;
@@ -61,6 +69,8 @@ function sheetOf(text: string): Sheet {
     title: "Rope and Tar",
     facts: "4 beats in a bar, 112 a minute",
     ...{ chart: text, from, key, singer: "Maren", firstNote: "D4", strokes: null, chords },
+    tune,
+    order: "Verse, chorus.",
     instrument: {
       ...{ name: "Box guitar", strings, tuned: strings, fretNames: null, leftHanded: false },
       ...{ retune: 0, capo: 3, shapeKey: from },
@@ -198,6 +208,34 @@ test("an arrangement's own chords are called and drawn as it has them, with its 
   expect(pictures).toContainEqual(expect.stringMatching(/^Gadd9: A string fret 5, finger 1; D string fret 5/));
   expect(pictures).toContain("Right hand, each bar: down on 1, down on 2, down on 3, down on 4");
   expect(lines(page!)).toContain("Down on every beat.");
+});
+
+test("the aside shows the tune in the singer's voice, and says the order of the parts", () => {
+  const [page] = sheetPages(sheetOf(song), usual);
+  expect(lines(page!)).toEqual(
+    expect.arrayContaining(["The tune in your voice", "A3", "B4", "Order", "Verse, chorus."]),
+  );
+  const picture = page!.pieces.find((piece) => piece.kind === "picture" && piece.what === "tune");
+  if (picture?.kind !== "picture") throw new Error("no picture of the tune");
+  expect(picture.words).toBe(`The tune in your voice: ${tune.words}`);
+  const [comfort] = picture.pieces.flatMap((piece) => (piece.kind === "box" ? [piece] : []));
+  const marks = picture.pieces.flatMap((piece) => (piece.kind === "line" && piece.width > 4 ? [piece.x1] : []));
+  expect(marks).toHaveLength(4);
+  for (const x of marks) {
+    expect(x).toBeGreaterThan(comfort!.x);
+    expect(x).toBeLessThan(comfort!.x + comfort!.width);
+  }
+  const outside = { ...tune, marks: [...tune.marks, { midi: 79, share: 0.1 }] };
+  const beyond = sheetPages({ ...sheetOf(song), tune: outside }, usual)[0]!.pieces.flatMap((piece) =>
+    piece.kind === "picture" && piece.what === "tune" ? piece.pieces : [],
+  );
+  const right = Math.max(...beyond.flatMap((piece) => (piece.kind === "line" ? [piece.x1, piece.x2] : [])));
+  expect(right).toBeLessThan(page!.width - 56);
+});
+
+test("the order stands at the side of something, never alone", () => {
+  const bare = { ...sheetOf(song), tune: null, instrument: null, chords: [] };
+  expect(sheetPages(bare, usual).flatMap(lines)).not.toContain("Order");
 });
 
 test("a left-handed grid mirrors the strings", () => {

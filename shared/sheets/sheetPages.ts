@@ -9,6 +9,7 @@ import type { SheetPicture, SheetPiece } from "./sheetPiece";
 import { rowHeight, rowPieces } from "./sheetRowPieces";
 import { strokesHeight, strokesPicture } from "./strokesPicture";
 import { cellWidth, textPiece, wrapText } from "./textPiece";
+import { tuneHeight, tuneInVoice } from "./tuneInVoice";
 
 /** Margins of the paper, the aside and the gap beside it, px. */
 const margin = { top: 38, side: 56, bottom: 28 } as const;
@@ -134,22 +135,47 @@ function inRows<Item>(items: readonly Item[], each: number): Item[][] {
 
 function asideBlocks(sheet: Sheet, options: SheetOptions): AsideBlock[] {
   const grids = inRows(griddedChords(sheet, options), 2).map((row) => gridRow(row, options.leftHanded, gridWidth));
-  const { strokes } = sheet;
-  if (!strokes) return grids;
-  const words = wrapText(strokes.words, "text", 13, asideWidth);
+  const { strokes, tune, order } = sheet;
+  const width = asideWidth - 10;
+  if (grids.length === 0 && !strokes && !tune) return [];
   return [
     ...grids,
-    {
-      height: 36 + strokesHeight + 18 * words.length,
-      draw: ({ x, y }) => [
-        textPiece("Right hand, each bar", { x, y: y + 24, size: 14, face: "title", tone: "soft", role: "heading" }),
-        strokesPicture(strokes, { x, y: y + 34, width: asideWidth - 10 }),
-        ...words.map((line, k) =>
-          textPiece(line, { x, y: y + 34 + strokesHeight + 14 + 18 * k, size: 13, face: "text", tone: "soft" }),
-        ),
-      ],
-    },
+    ...(strokes
+      ? [
+          asideNote("Right hand, each bar", strokes.words, {
+            height: strokesHeight,
+            draw: (at) => strokesPicture(strokes, { ...at, width }),
+          }),
+        ]
+      : []),
+    ...(tune
+      ? [
+          asideNote("The tune in your voice", tune.words, {
+            height: tuneHeight,
+            draw: (at) => tuneInVoice(tune, { ...at, width }),
+          }),
+        ]
+      : []),
+    ...(order === "" ? [] : [asideNote("Order", order, null)]),
   ];
+}
+
+/** Something said in the aside: a heading, a picture where there is one, and the words under it. */
+function asideNote(
+  heading: string,
+  said: string,
+  picture: { height: number; draw: (at: { x: number; y: number }) => SheetPiece } | null,
+): AsideBlock {
+  const words = wrapText(said, "text", 13, asideWidth);
+  const wordsAt = 34 + (picture ? picture.height + 14 : 8);
+  return {
+    height: wordsAt + 18 * words.length + 4,
+    draw: ({ x, y }) => [
+      textPiece(heading, { x, y: y + 24, size: 14, face: "title", tone: "soft", role: "heading" }),
+      ...(picture ? [picture.draw({ x, y: y + 34 })] : []),
+      ...words.map((line, k) => textPiece(line, { x, y: y + wordsAt + 18 * k, size: 13, face: "text", tone: "soft" })),
+    ],
+  };
 }
 
 /** Grids across the paper under the head, and the strokes behind them. */

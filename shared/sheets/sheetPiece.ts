@@ -2,7 +2,7 @@
 export type SheetFace = "mono" | "monoBold" | "title" | "text" | "textBold";
 
 /** Colours by what they are for. */
-export type SheetTone = "ink" | "soft" | "line" | "plum" | "lagoon" | "paper" | "onPlum";
+export type SheetTone = "ink" | "soft" | "line" | "plum" | "lagoon" | "comfort" | "reach" | "paper" | "onPlum";
 
 /** Letters in one face beside each other; signs of the music font stand in runs of their own. */
 export interface SheetRun {
@@ -61,7 +61,7 @@ export interface SheetDot {
 /** What belongs together as a picture and has words of its own. */
 export interface SheetPicture {
   kind: "picture";
-  what: "grid" | "strokes" | "mark";
+  what: "grid" | "strokes" | "tune" | "mark";
   /** the picture in words */
   words: string;
   pieces: (SheetText | SheetLine | SheetBox | SheetDot)[];

@@ -5,6 +5,7 @@ import { instrumentWords } from "@/features/instruments/myInstruments";
 import { useInstrument } from "@/features/instruments/useInstrument";
 import { askedKey } from "@/features/keys/songKeys";
 import { decidedHere, useSongKeys } from "@/features/keys/useSongKeys";
+import { useTuneInKey } from "@/features/keys/useTuneInKey";
 import { ShareLinks } from "@/features/sheets/links/ShareLinks";
 import { linkView } from "@/features/sheets/links/linkView";
 import type { SheetParams } from "@/features/sheets/sheetInHand";
@@ -41,6 +42,7 @@ function SongSheet({ song }: { song: Song }) {
   const inHand = useSheetInHand({
     ...{ song, key, shift, instrument, asked },
     singer: singer.voice?.name ?? null,
+    tune: useTuneInKey(keys, shift),
     ways: found.data,
     kept: mine?.instrument === instrument.id ? mine.way : null,
     arrangements: useSheetArrangements(song, shift, instrument),

@@ -113,7 +113,7 @@ export function WhyScreen({ song, asked, way, step, onStep, waysHref }: WhyScree
   return (
     <Screen
       title={whyTitle(asked.to)}
-      subtitle={wide ? `${song.title}. ${way}` : way}
+      subtitle={way}
       crumb={{ label: song.title, href: { pathname: "/songs/[id]", params: { id: song.id } } }}
       wide
       footer={wide ? undefined : moves}

@@ -6,24 +6,21 @@ import type { SheetTune } from "./sheet";
 /**
  * Where the tune lies in the voice, for the sheet.
  *
- * @param score a key as it was judged; of its reason only the sentence for the singer
+ * @param score a key as it was judged
  * @param voice on whole semitones
  * @param key how notes are spelled
- * @param reason in a sentence, with glyphs
  * @returns bands, marks and words
  * @throws RangeError if the key's tonic is no note name
  * @example sheetTune(
- *   { marks: [{ midi: 62, share: 1, zone: "comfort", home: true }], reserves: { upper: 9, lower: 9 } },
+ *   { marks: [{ midi: 62, share: 1, zone: "comfort", home: true }], reserves: { upper: 9, lower: 9, tessituraShift: 0 }, reason: "All of it sits well." },
  *   { range: { lowMidi: 53, highMidi: 74 }, comfort: { lowMidi: 57, highMidi: 71 } },
  *   { tonic: "D", mode: "major" },
- *   "All of it sits well.",
  * ).words // => "All of it sits well. 9 semitones of room above."
  */
 export function sheetTune(
-  { marks, reserves }: Pick<KeyScore, "marks" | "reserves">,
+  { marks, reserves, reason }: Pick<KeyScore, "marks" | "reserves" | "reason">,
   { range, comfort }: SingingVoice,
   key: KeyName,
-  reason: string,
 ): SheetTune {
   const spelling = keyFifths(key) < 0 ? "flats" : "sharps";
   const name = (midi: number) => glyphs(noteName(Math.round(midi), spelling));

@@ -90,7 +90,7 @@ export function EveryoneScreen(props: EveryoneScreenProps) {
   return (
     <Screen
       title={`Everyone’s plan in ${sign}`}
-      subtitle={song.title}
+      subtitle={phone ? song.title : "Who plays what, so that all of it sounds together"}
       crumb={{ label: song.title, href: { pathname: "/songs/[id]", params: { id: song.id } } }}
       wide
       footer={print || undefined}
@@ -241,7 +241,7 @@ const grid = {
 /** On paper: what everybody plays, and nothing to press. */
 const paper = `@media print{@page{margin:12mm}
 html,body,#root{background:#fff!important}
-[role=main] [role=button],[data-screen],[role=radiogroup] [aria-checked=false]{display:none!important}
+button:not([role=radio]),[role=button],[data-screen],[role=radiogroup] [aria-checked=false]{display:none!important}
 [role=main]{max-width:none!important}
 *{print-color-adjust:exact;-webkit-print-color-adjust:exact}}`;
 

@@ -193,6 +193,25 @@ test("the stage scrolls as steadily as the song goes, and a pedal starts it and 
   const seconds = (songLength(ferry).quarters * 60) / 92;
   expect(Math.abs(whole / (height / seconds) - 1)).toBeLessThan(0.03);
   expect(await top()).toBe(stopped);
+
+  // Who asks for less motion gets pages instead of a scroll: between two turns the words stand still.
+  await page.emulateMedia({ reducedMotion: "reduce" });
+  await page.keyboard.press("Space");
+  const places = await scroller.evaluate(
+    (node) =>
+      new Promise<number>((done) => {
+        const tops = new Set<number>();
+        const until = performance.now() + 2500;
+        const look = (at: number) => {
+          tops.add(node.scrollTop);
+          if (at < until) requestAnimationFrame(look);
+          else done(tops.size);
+        };
+        requestAnimationFrame(look);
+      }),
+  );
+  await page.keyboard.press("Space");
+  expect(places).toBeLessThanOrEqual(2);
   expect(await axeFaults(page)).toEqual([]);
   expect(errors).toEqual([]);
 }, 90_000);

@@ -16,11 +16,16 @@ const swc = [
     module: { type: "commonjs" },
   },
 ];
+/** Packages that come as ES modules only. */
+const modules = [
+  ...["pitchy", "fft\\.js", "@tus", "srvx", "file-type", "strtok3", "token-types", "@tokenizer", "@borewit"],
+  ...["uint8array-extras", "set-cookie-parser"],
+];
 const node = {
   testEnvironment: "node",
   moduleNameMapper: alias,
   transform: { "^.+\\.[cm]?[jt]s$": swc },
-  transformIgnorePatterns: ["/node_modules/(?!(pitchy|fft\\.js)/)"],
+  transformIgnorePatterns: [`/node_modules/(?!(${modules.join("|")})/)`],
 };
 
 /** @type {import('jest').Config} */

@@ -30,6 +30,7 @@ import { songsRoutes } from "./songs/songs.router";
 import type { FakeSmtp } from "./mail/inbox/fakeSmtp";
 import { inboxPage } from "./mail/inbox/inboxPage";
 import { mailRoutes } from "./mail/mail.router";
+import { handInsRoutes } from "./studio/handIns/handIns.router";
 import { type ObjectStore, storageOrigin } from "./storage/objectStore.service";
 import { studioRoutes } from "./studio/studio.router";
 import { voicesRoutes } from "./voices/voices.router";
@@ -57,7 +58,7 @@ export function createApp(dataSource: DataSource, logger: Logger, settings: AppS
   const parts = authParts(dataSource, settings);
   authRoutes(api, parts);
   recoveryRoutes(api, parts);
-  accountRoutes(api, parts, createPersonalData(dataSource, settings.tokenSecret));
+  accountRoutes(api, parts, createPersonalData(dataSource, settings));
   emailRoutes(api, parts);
   secondFactorRoutes(api, parts);
   voicesRoutes(api, dataSource);
@@ -75,6 +76,7 @@ export function createApp(dataSource: DataSource, logger: Logger, settings: AppS
     tokenSecret: settings.tokenSecret,
     stores: [{ name: "recordings", isUp: () => settings.objects.isUp() }],
   });
+  handInsRoutes(api, dataSource, settings.objects);
   healthRoutes(api, dataSource);
   descriptionRoutes(api);
 

@@ -9,6 +9,9 @@ import { LinkTokensService } from "./mail/linkTokens.service";
 import { sendMailTask } from "./mail/mail.service";
 import { MailPreferencesService } from "./mail/mailPreferences.service";
 import { Postman } from "./mail/postman";
+import type { ObjectStore } from "./storage/objectStore.service";
+import { HandInsService } from "./studio/handIns/handIns.service";
+import { deleteTakesTask } from "./studio/handIns/takeDeletion";
 import { WeeklySummaryService } from "./studio/weekly/weeklySummary.service";
 
 /** Writes the summaries of the week. */
@@ -23,11 +26,12 @@ interface JobSettings {
   mailFrom: string;
   /** where the links in mails lead */
   origin: string;
+  objects: ObjectStore;
 }
 
 /** Puts together everything that is done by jobs; the only place that knows all of it. */
 export function createJobs(dataSource: DataSource, settings: JobSettings): Jobs & { close: () => void } {
-  const { tokenSecret, smtpUrl, mailFrom, origin } = settings;
+  const { tokenSecret, smtpUrl, mailFrom, origin, objects } = settings;
   const transport = createTransport({
     url: smtpUrl,
     connectionTimeout: 10_000,
@@ -45,11 +49,13 @@ export function createJobs(dataSource: DataSource, settings: JobSettings): Jobs 
     preferences: new MailPreferencesService(dataSource, tokenSecret),
   });
   const parts = authParts(dataSource, { tokenSecret, publicOrigin: origin });
-  const personalData = createPersonalData(dataSource, tokenSecret);
+  const personalData = createPersonalData(dataSource, { tokenSecret, objects });
+  const takes = new HandInsService(dataSource, objects).deletion;
   const handlers: Record<string, JobHandler> = {
     [sendMailTask]: (payload) => postman.deliver(payload),
     [sendResetTask]: (payload) => sendReset(parts, payload),
     [eraseAccountsTask]: () => eraseAccounts(dataSource, personalData, parts.log),
+    [deleteTakesTask]: () => takes.sweep(),
     [weeklySummaryTask]: () => new WeeklySummaryService(dataSource).send(),
     [tidyUpTask]: async () => {
       await parts.log.forgetOld();
@@ -57,6 +63,7 @@ export function createJobs(dataSource: DataSource, settings: JobSettings): Jobs 
     },
   };
   const recurring = [
+    { task: deleteTakesTask, match: "*/5 * * * *" },
     { task: eraseAccountsTask, match: "7 * * * *" },
     { task: weeklySummaryTask, match: "12 6 * * 1" },
     { task: tidyUpTask, match: "37 3 * * *" },

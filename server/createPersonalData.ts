@@ -12,13 +12,18 @@ import { songsOf } from "./songs/songs.service";
 import { studioDataOf } from "./studio/studioData.service";
 import { studioParts } from "./studio/studioParts";
 import { playerWishesOf } from "./ways/playerWishes.service";
+import type { ObjectStore } from "./storage/objectStore.service";
+import { HandedInTakes } from "./studio/handIns/handedInTakes.service";
 import { takesOf, voicesOf } from "./voices/voices.service";
 
 /**
  * What every domain keeps of a person: goes into the export, and is erased with the account. A new domain adds its part
  * here; one that keeps files outside the database gives it an `erase` as well.
  */
-export function createPersonalData(dataSource: DataSource, tokenSecret: string): PersonalDataPart[] {
+export function createPersonalData(
+  dataSource: DataSource,
+  { tokenSecret, objects }: { tokenSecret: string; objects: ObjectStore },
+): PersonalDataPart[] {
   const preferences = new MailPreferencesService(dataSource, tokenSecret);
   const { studios, guardians } = studioParts(dataSource, { tokenSecret });
   const versions = new SongVersionsService(dataSource);
@@ -100,5 +105,6 @@ export function createPersonalData(dataSource: DataSource, tokenSecret: string):
       name: "instruments",
       files: async (userId) => ({ "instruments.json": await instrumentsOf(dataSource).list(userId) }),
     },
+    new HandedInTakes(dataSource, objects),
   ];
 }

@@ -55,7 +55,7 @@ async function main(): Promise<void> {
   const host = env.host.includes(":") ? `[${env.host}]` : env.host;
   const here = `http://${host}:${port}`;
   const origin = env.publicOrigin ?? here;
-  const jobs = createJobs(dataSource, { ...env, origin, smtpUrl: env.smtpUrl ?? fakeSmtp?.url ?? "" });
+  const jobs = createJobs(dataSource, { ...env, objects, origin, smtpUrl: env.smtpUrl ?? fakeSmtp?.url ?? "" });
   const worker = await startWorker(env.databaseUrl, jobs, logger);
 
   let stopping = false;

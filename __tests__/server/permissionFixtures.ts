@@ -2,6 +2,7 @@ import { randomUUID } from "node:crypto";
 import type { OpenSession } from "../../shared/contract/account";
 import type { MadeSheetLink } from "../../shared/contract/sheetLink";
 import { aDecision, aLineUp, anArrangement, anInstrument, aSong, aTake, aTry, aVoice, someWishes } from "./belongings";
+import { aHandIn, aWav, from, handIn, partInStudio } from "./partInStudio";
 import { studioFixtures } from "./studio/studioFixtures";
 import type { Person, TestServer } from "./testServer";
 
@@ -9,6 +10,7 @@ import type { Person, TestServer } from "./testServer";
 export interface Fixture {
   ids: Record<string, string>;
   body?: object;
+  headers?: Record<string, string>;
 }
 
 /** Makes a thing of this person. `absent` gives ids that nobody has, with a body that fits them. */
@@ -69,6 +71,29 @@ export const fixtures: Record<string, FixtureMaker> = {
   "/admin/users/{id}/role": {
     make: async (person) => ({ ids: { id: person.id }, body: { role: "singer" } }),
     absent: async () => ({ ids: { id: randomUUID() }, body: { role: "singer" } }),
+  },
+  "/parts/{id}/hand-ins": {
+    make: async (pupil, server) => ({
+      ids: { id: (await partInStudio(server, { pupil })).partId },
+      body: aHandIn(100),
+    }),
+    absent: async () => ({ ids: { id: randomUUID() }, body: aHandIn(100) }),
+  },
+  "/hand-ins/{id}": {
+    async make(pupil, server) {
+      const { partId } = await partInStudio(server, { pupil });
+      return { ids: { id: await handIn(pupil, partId) } };
+    },
+    absent: nowhere,
+  },
+  "/uploads/{id}": {
+    async make(pupil, server) {
+      const { partId } = await partInStudio(server, { pupil });
+      const asked = aHandIn(aWav().length);
+      await pupil.post(`/api/parts/${partId}/hand-ins`, asked).expect(201);
+      return { ids: { id: asked.id }, body: aWav(), headers: from(0) };
+    },
+    absent: async () => ({ ids: { id: randomUUID() }, body: aWav(), headers: from(0) }),
   },
   "/sheet-links/{id}": {
     make: async (person) => ({ ids: { id: (await linkOf(person)).link.id } }),

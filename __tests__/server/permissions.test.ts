@@ -6,7 +6,7 @@ import { Person, startTestServer, type TestServer } from "./testServer";
 
 interface Route {
   id: string;
-  method: "get" | "post" | "put" | "delete";
+  method: "get" | "post" | "put" | "delete" | "head" | "patch";
   path: string;
   guarded: boolean;
   permission: Permission;
@@ -84,10 +84,10 @@ function refusal(kind: Kind, { who, confirmed }: Permission): number | null {
 const fill = (path: string, ids: Record<string, string>) =>
   `/api${path.replace(/\{(\w+)\}/g, (_, name: string) => ids[name] ?? "missing")}`;
 
-async function ask(person: Person | null, { method, path }: Route, ids: Record<string, string>, body?: object) {
-  const asking = request(server.app)[method](fill(path, ids));
+async function ask(person: Person | null, { method, path }: Route, { ids, body, headers = {} }: Fixture) {
+  const asking = request(server.app)[method](fill(path, ids)).set(headers);
   if (person) asking.set("Authorization", `Bearer ${person.token}`);
-  return method === "get" ? asking : asking.send(body ?? {});
+  return method === "get" || method === "head" ? asking : asking.send(body ?? {});
 }
 
 /** What can be made for the ids of a path, and under which name. */
@@ -111,7 +111,7 @@ it("every route is classified, and no entry stands for a route that is gone", ()
 
 /** A refusal changes nothing, and neither does asking. */
 const mayChange = ({ method, permission }: Route, kind: Kind) =>
-  method !== "get" && refusal(kind, permission) === null && permission.who !== "visitor";
+  method !== "get" && method !== "head" && refusal(kind, permission) === null && permission.who !== "visitor";
 
 describe.each(kinds)("for somebody who is %s", (kind) => {
   it("every route without an id answers as the table says", async () => {
@@ -122,7 +122,7 @@ describe.each(kinds)("for somebody who is %s", (kind) => {
         if (made && kind === "suspended") await suspend(made);
         return made;
       });
-      const { status, body } = await ask(person, route, {});
+      const { status, body } = await ask(person, route, { ids: {} });
       const expected = refusal(kind, route.permission);
       if (expected !== null) expect([route.id, status]).toEqual([route.id, expected]);
       else {
@@ -158,8 +158,7 @@ describe.each(kinds)("for somebody who is %s", (kind) => {
       });
       // One's own last: it may be gone, or the session with it.
       for (const which of ["foreign", "absent", "own"] as const) {
-        const { ids, body } = asked[which];
-        const { status } = await ask(person, route, ids, body);
+        const { status } = await ask(person, route, asked[which]);
         const what = [route.id, which];
         const expected = refusal(kind, route.permission);
         const { object } = route.permission;

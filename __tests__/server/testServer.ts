@@ -53,13 +53,14 @@ export async function startTestServer(
   const nothing = mkdtempSync(path.join(tmpdir(), "larkspan-nothing-"));
   const smtp = await FakeSmtp.start();
   const s3 = await FakeS3.start(path.join(nothing, "storage"));
+  const objects = new ObjectStore(s3.settings);
   const { app, api } = createApp(dataSource, logger, {
     tokenSecret,
     publicOrigin: null,
     trustProxy: false,
     staticDir: nothing,
     fakeSmtp: smtp,
-    objects: new ObjectStore(s3.settings),
+    objects,
     hashCost: quick,
     ...settings,
   });
@@ -67,6 +68,7 @@ export async function startTestServer(
     tokenSecret,
     smtpUrl: smtp.url,
     mailFrom: "Larkspan <no-reply@larkspan.test>",
+    objects,
     origin: settings.publicOrigin ?? "http://larkspan.test",
   });
   const pool = new Pool({ connectionString: database.url, max: 3 });
@@ -124,6 +126,14 @@ export class Person {
 
   post(path: string, body: object = {}): Test {
     return this.asking(request(this.app).post(path).send(body));
+  }
+
+  head(path: string): Test {
+    return this.asking(request(this.app).head(path));
+  }
+
+  patch(path: string, body: Buffer): Test {
+    return this.asking(request(this.app).patch(path).send(body));
   }
 
   delete(path: string): Test {

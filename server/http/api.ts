@@ -19,7 +19,7 @@ export interface Answer {
 
 /** One operation of the API as it is described to others. */
 export interface Operation {
-  method: "get" | "post" | "put" | "delete";
+  method: "get" | "post" | "put" | "delete" | "head" | "patch";
   /** below /api, in Express' notation */
   path: string;
   tag: string;

@@ -99,7 +99,8 @@ export function handedInMail({ pupil, song, note }: HandedInData, link: string):
 export interface AnsweredData {
   teacher: string;
   song: string;
-  accepted: boolean;
+  /** null: an answer that decides nothing, such as one that was recorded */
+  accepted: boolean | null;
   note: string | null;
 }
 
@@ -108,9 +109,11 @@ export function answeredMail({ teacher, song, accepted, note }: AnsweredData, li
   return setMail({
     subject: accepted ? `${song} is accepted` : `An answer to your take of ${song}`,
     says: [
-      accepted
-        ? `${teacher} listened to your take of "${song}" and accepted it.`
-        : `${teacher} listened to your take of "${song}" and would like to hear it again.`,
+      accepted === null
+        ? `${teacher} recorded an answer to your take of "${song}".`
+        : accepted
+          ? `${teacher} listened to your take of "${song}" and accepted it.`
+          : `${teacher} listened to your take of "${song}" and would like to hear it again.`,
     ],
     quote: note,
     action: { label: "Read the answer", link },

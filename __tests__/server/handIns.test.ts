@@ -1,0 +1,331 @@
+import { once } from "node:events";
+import { createServer, request as openRequest } from "node:http";
+import type { AddressInfo } from "node:net";
+import request from "supertest";
+import { createApp } from "../../server/createApp";
+import { createDataSource } from "../../server/database/dataSource";
+import { createLogger } from "../../server/http/requestLog";
+import { ObjectStore } from "../../server/storage/objectStore.service";
+import type { HandIn, SoundLink } from "../../shared/contract/studio/handIn";
+import { aHandIn, aWav, from, handIn, partInStudio, type PartInStudio, tus } from "./partInStudio";
+import { Person, startTestServer, type TestServer, tokenSecret } from "./testServer";
+
+let server: TestServer;
+let place: PartInStudio;
+beforeAll(async () => {
+  server = await startTestServer();
+});
+afterAll(() => server.close());
+beforeEach(async () => {
+  server.s3.down = false;
+  place = await partInStudio(server);
+  server.smtp.mails.length = 0;
+});
+
+const listed = async (person: Person): Promise<HandIn[]> =>
+  (await person.get(`/api/parts/${place.partId}/hand-ins`).expect(200)).body;
+const partState = async () =>
+  (await server.database.query("SELECT state, effort FROM assignment_parts WHERE id = $1", [place.partId]))[0];
+const withdraw = () =>
+  server.database.query("UPDATE studio_members SET consent_withdrawn_at = now() WHERE id = $1", [place.pupilMemberId]);
+const sweep = async () => {
+  await server.database.query("SELECT larkspan_jobs.add_job('deleteTakes')");
+  await server.runJobs();
+};
+const held = async (id: string) => (await server.s3.keys()).filter((key) => key.startsWith(id));
+const recordOf = async (id: string) =>
+  (await server.database.query("SELECT why, deleted_at FROM deletion_records WHERE storage_key = $1", [id]))[0];
+
+async function until(done: () => Promise<boolean>): Promise<void> {
+  while (!(await done())) await new Promise((resolve) => setImmediate(resolve));
+}
+
+describe("handing in", () => {
+  it("puts the take into the thread of both sides, moves the part on and writes to the teachers once", async () => {
+    const { pupil, teacher, partId } = place;
+    const id = await handIn(pupil, partId);
+    expect(await partState()).toEqual({ state: "handed-in", effort: 2 });
+    for (const person of [pupil, teacher]) {
+      expect(await listed(person)).toMatchObject([
+        { id, partId, kind: "pupil-take", state: "ready", mine: person === pupil, author: { name: "Maren Oake" } },
+      ]);
+    }
+    const [take] = await listed(teacher);
+    expect(take?.picture?.waveform).toEqual([0, 0.5, 1]);
+    expect((Date.parse(take!.expiresAt) - Date.now()) / 86_400_000).toBeCloseTo(90, 1);
+    await server.runJobs();
+    expect(server.smtp.mails.map(({ to, subject }) => [to, subject])).toEqual([
+      [teacher.email, "Maren Oake handed in Slack Water"],
+    ]);
+    expect(server.smtp.mails[0]?.text).toContain(`/studio/parts/${partId}`);
+  });
+
+  it("plays to the teacher by a signed link that holds the very bytes", async () => {
+    const wav = aWav(3000);
+    const id = await handIn(place.pupil, place.partId, {}, wav);
+    const { url } = (await place.teacher.get(`/api/hand-ins/${id}/sound`).expect(200)).body as SoundLink;
+    const sound = await fetch(url);
+    expect(sound.headers.get("content-type")).toBe("audio/wav");
+    expect(Buffer.from(await sound.arrayBuffer()).equals(wav)).toBe(true);
+  });
+
+  it("a teacher's recorded answer reaches the pupil, and leaves the part as it is", async () => {
+    const { pupil, teacher, partId } = place;
+    await handIn(pupil, partId);
+    await server.runJobs();
+    server.smtp.mails.length = 0;
+    const id = await handIn(teacher, partId, { kind: "teacher-answer", effort: null });
+    expect((await listed(pupil)).map((take) => [take.id === id, take.kind, take.mine])).toEqual([
+      [false, "pupil-take", true],
+      [true, "teacher-answer", false],
+    ]);
+    expect((await partState())?.state).toBe("handed-in");
+    await server.runJobs();
+    expect(server.smtp.mails.map(({ to, text }) => [to, text.includes("recorded an answer")])).toEqual([
+      [pupil.email, true],
+    ]);
+    await pupil.get(`/api/hand-ins/${id}/sound`).expect(200);
+  });
+
+  it("refuses a take by the teacher and an answer by the pupil", async () => {
+    const { pupil, teacher, partId } = place;
+    const post = (person: Person, kind: HandIn["kind"]) =>
+      person.post(`/api/parts/${partId}/hand-ins`, aHandIn(100, { kind })).expect(403);
+    expect((await post(teacher, "pupil-take")).body.code).toBe("wrong-side");
+    expect((await post(pupil, "teacher-answer")).body.code).toBe("wrong-side");
+  });
+
+  it("takes no more than 20 MB, ten minutes and a picture of its size", async () => {
+    for (const [changes, path] of [
+      [{ bytes: 20_000_001 }, "bytes"],
+      [{ durationS: 601 }, "durationS"],
+      [{ picture: { waveform: Array<number>(401).fill(0), trail: [] } }, "picture.waveform"],
+    ] as const) {
+      const { body } = await place.pupil
+        .post(`/api/parts/${place.partId}/hand-ins`, aHandIn(100, changes as object))
+        .expect(422);
+      expect(body.fields[0].path).toBe(path);
+    }
+  });
+});
+
+describe("sending", () => {
+  const announced = async (bytes: number) => {
+    const asked = aHandIn(bytes);
+    await place.pupil.post(`/api/parts/${place.partId}/hand-ins`, asked).expect(201);
+    return asked;
+  };
+  const offset = async (id: string) =>
+    Number((await place.pupil.head(`/api/uploads/${id}`).set(tus).expect(200)).headers["upload-offset"]);
+
+  it("goes on where it was cut, also at another server, and an announcement may be repeated", async () => {
+    const dataSource = await createDataSource(server.database.url, () => undefined).initialize();
+    const other = createApp(dataSource, createLogger("silent"), {
+      ...{ tokenSecret, publicOrigin: null, trustProxy: false, staticDir: "/nonexistent" },
+      objects: new ObjectStore(server.s3.settings),
+    });
+    const wav = aWav(9000);
+    const asked = await announced(wav.length);
+    const at = `/api/uploads/${asked.id}`;
+    await place.pupil.patch(at, wav.subarray(0, 4000)).set(from(0)).expect(204);
+    expect(await listed(place.teacher)).toEqual([]);
+    await place.pupil.post(`/api/parts/${place.partId}/hand-ins`, asked).expect(201);
+    expect(await offset(asked.id)).toBe(4000);
+    await place.pupil.patch(at, wav.subarray(0, 100)).set(from(0)).expect(409);
+    await request(other.app)
+      .patch(at)
+      .set({ ...from(4000), Authorization: `Bearer ${place.pupil.token}` })
+      .send(wav.subarray(4000))
+      .expect(204);
+    await dataSource.destroy();
+    expect(await offset(asked.id)).toBe(9000);
+    expect(await listed(place.teacher)).toMatchObject([{ id: asked.id, state: "ready" }]);
+    const { url } = (await place.teacher.get(`/api/hand-ins/${asked.id}/sound`).expect(200)).body as SoundLink;
+    expect(Buffer.from(await (await fetch(url)).arrayBuffer()).equals(wav)).toBe(true);
+  });
+
+  it("keeps what had come when a connection is cut in the middle of a request", async () => {
+    const wav = aWav(9000);
+    const asked = await announced(wav.length);
+    const listening = createServer(server.app).listen(0, "127.0.0.1");
+    await once(listening, "listening");
+    const sending = openRequest({
+      port: (listening.address() as AddressInfo).port,
+      method: "PATCH",
+      path: `/api/uploads/${asked.id}`,
+      headers: { ...from(0), "Content-Length": wav.length, Authorization: `Bearer ${place.pupil.token}` },
+    });
+    sending.on("error", () => undefined);
+    sending.write(wav.subarray(0, 5000));
+    // The bytes are on their way to the storage once somebody holds the upload's lock.
+    await until(async () => (await server.database.query("SELECT FROM upload_locks")).length > 0);
+    sending.destroy();
+    expect(await offset(asked.id)).toBe(5000);
+    await place.pupil.patch(`/api/uploads/${asked.id}`, wav.subarray(5000)).set(from(5000)).expect(204);
+    listening.close();
+    expect(await listed(place.teacher)).toMatchObject([{ id: asked.id, state: "ready" }]);
+  });
+
+  it("finishes by a repeated announcement what a lost last answer left open, and writes one mail", async () => {
+    const wav = aWav();
+    const asked = await announced(wav.length);
+    await place.pupil.patch(`/api/uploads/${asked.id}`, wav).set(from(0)).expect(204);
+    // As if the server had ended between the storage's answer and its own.
+    await server.database.query("UPDATE hand_ins SET state = 'uploading' WHERE id = $1", [asked.id]);
+    const { body } = await place.pupil.post(`/api/parts/${place.partId}/hand-ins`, asked).expect(201);
+    expect(body.state).toBe("ready");
+    await server.runJobs();
+    expect(server.smtp.mails.filter(({ to }) => to === place.teacher.email)).toHaveLength(1);
+  });
+
+  it("looks at the bytes and deletes what is no sound, whatever it was called", async () => {
+    const page = Buffer.from("<!doctype html><script>alert(1)</script>".padEnd(2000));
+    const asked = await announced(page.length);
+    const { body } = await place.pupil.patch(`/api/uploads/${asked.id}`, page).set(from(0)).buffer(true).expect(422);
+    expect(body.code).toBe("not-a-recording");
+    await server.runJobs();
+    expect(await held(asked.id)).toEqual([]);
+    expect(await recordOf(asked.id)).toMatchObject({ why: "refused", deleted_at: expect.any(Date) });
+    expect((await partState())?.state).toBe("assigned");
+    await place.pupil.patch(`/api/uploads/${asked.id}`, page).set(from(0)).expect(410);
+  });
+
+  it("refuses more bytes than were announced, and what is not sent as bytes", async () => {
+    const { id } = await announced(1000);
+    await place.pupil.patch(`/api/uploads/${id}`, aWav(1001)).set(from(0)).expect(413);
+    const { body } = await place.pupil
+      .patch(`/api/uploads/${id}`, aWav())
+      .set({ ...from(0), "Content-Type": "text/plain" });
+    expect(body.code).toBe("unsupported-media-type");
+    expect(await offset(id)).toBe(0);
+  });
+
+  it("nobody else sends, hears or deletes it", async () => {
+    const wav = aWav();
+    const asked = await announced(wav.length);
+    const stranger = await Person.put(server, "teacher", true);
+    for (const person of [stranger, place.teacher]) {
+      await person.head(`/api/uploads/${asked.id}`).set(tus).expect(404);
+      await person.patch(`/api/uploads/${asked.id}`, wav).set(from(0)).expect(404);
+    }
+    await place.pupil.patch(`/api/uploads/${asked.id}`, wav).set(from(0)).expect(204);
+    await stranger.get(`/api/hand-ins/${asked.id}/sound`).expect(404);
+    await stranger.delete(`/api/hand-ins/${asked.id}`).expect(404);
+    await place.teacher.delete(`/api/hand-ins/${asked.id}`).expect(403);
+  });
+
+  it("says in its own words that the storage does not answer, and goes on when it does", async () => {
+    const wav = aWav();
+    const asked = await announced(wav.length);
+    server.s3.down = true;
+    const { body } = await place.pupil.patch(`/api/uploads/${asked.id}`, wav).set(from(0)).buffer(true).expect(503);
+    expect(body.code).toBe("storage-down");
+    server.s3.down = false;
+    await place.pupil.patch(`/api/uploads/${asked.id}`, wav).set(from(0)).expect(204);
+  });
+
+  it("tells pages of other sites nothing that would let them send", async () => {
+    const { id } = await announced(1000);
+    const { headers } = await place.pupil
+      .head(`/api/uploads/${id}`)
+      .set({ ...tus, Origin: "https://elsewhere.example" });
+    expect(headers).not.toHaveProperty("access-control-allow-origin");
+  });
+});
+
+describe("without consent", () => {
+  it("nothing is recorded to the server and the teacher hears nothing, from the moment it is withdrawn", async () => {
+    const { pupil, teacher, partId } = place;
+    const id = await handIn(pupil, partId);
+    const begun = aHandIn(2044);
+    await pupil.post(`/api/parts/${partId}/hand-ins`, begun).expect(201);
+    await withdraw();
+    const code = async (test: Promise<{ body: { code: string } }>) => (await test).body.code;
+    expect(await code(pupil.post(`/api/parts/${partId}/hand-ins`, aHandIn(100)).expect(403))).toBe("not-agreed");
+    expect(await code(pupil.patch(`/api/uploads/${begun.id}`, aWav()).set(from(0)).expect(403))).toBe("not-agreed");
+    for (const path of [`/api/hand-ins/${id}`, `/api/hand-ins/${id}/sound`, `/api/parts/${partId}/hand-ins`])
+      expect(await code(teacher.get(path).expect(403))).toBe("not-agreed");
+    await sweep();
+    expect([...(await held(id)), ...(await held(begun.id))]).toEqual([]);
+    expect(await recordOf(id)).toMatchObject({ why: "consent withdrawn", deleted_at: expect.any(Date) });
+  });
+
+  it("a pupil too young to agree alone records nothing until a guardian has agreed", async () => {
+    const { pupil, partId, pupilMemberId } = place;
+    await server.database.query("UPDATE users SET birth_year = extract(year FROM now()) - 12 WHERE id = $1", [
+      pupil.id,
+    ]);
+    await pupil.post(`/api/parts/${partId}/hand-ins`, aHandIn(100)).expect(403);
+    await server.database.query("UPDATE studio_members SET guardian_agreed_at = now() WHERE id = $1", [pupilMemberId]);
+    await handIn(pupil, partId);
+  });
+});
+
+describe("going", () => {
+  it("a take expires: out of the storage, with a record, and its place in the thread stays", async () => {
+    const { pupil, teacher, partId } = place;
+    const id = await handIn(pupil, partId);
+    await server.database.query("UPDATE hand_ins SET expires_at = now() WHERE id = $1", [id]);
+    await teacher.get(`/api/hand-ins/${id}/sound`).expect(410);
+    await sweep();
+    expect(await held(id)).toEqual([]);
+    expect(await recordOf(id)).toMatchObject({ why: "expired", deleted_at: expect.any(Date) });
+    expect(await listed(teacher)).toMatchObject([
+      { id, state: "deleted", picture: null, measures: null, effort: null },
+    ]);
+  });
+
+  it("an upload that never ends goes after a day, with every part of it", async () => {
+    const asked = aHandIn(9000);
+    await place.pupil.post(`/api/parts/${place.partId}/hand-ins`, asked).expect(201);
+    await place.pupil.patch(`/api/uploads/${asked.id}`, aWav(9000).subarray(0, 500)).set(from(0)).expect(204);
+    expect((await held(asked.id)).length).toBeGreaterThan(1);
+    await server.database.query("UPDATE hand_ins SET created_at = now() - interval '25 hours' WHERE id = $1", [
+      asked.id,
+    ]);
+    await sweep();
+    expect(await held(asked.id)).toEqual([]);
+    expect(await recordOf(asked.id)).toMatchObject({ why: "abandoned" });
+  });
+
+  it("whoever recorded it takes it back; the part is open again", async () => {
+    const id = await handIn(place.pupil, place.partId);
+    await place.pupil.delete(`/api/hand-ins/${id}`).expect(204);
+    await place.pupil.delete(`/api/hand-ins/${id}`).expect(204);
+    expect(await partState()).toEqual({ state: "assigned", effort: null });
+    await place.teacher.get(`/api/hand-ins/${id}/sound`).expect(410);
+    await server.runJobs();
+    expect(await held(id)).toEqual([]);
+  });
+
+  it("is tried again while the storage does not answer, and recorded only when it is done", async () => {
+    const id = await handIn(place.pupil, place.partId);
+    server.s3.down = true;
+    await place.pupil.delete(`/api/hand-ins/${id}`).expect(204);
+    await server.runJobs();
+    expect(await recordOf(id)).toEqual({ why: "taken back", deleted_at: null });
+    server.s3.down = false;
+    await sweep();
+    expect(await recordOf(id)).toMatchObject({ deleted_at: expect.any(Date) });
+    expect(await held(id)).toEqual([]);
+  });
+
+  it("whatever takes its row along takes its sound too: a membership, a studio, an account", async () => {
+    const id = await handIn(place.pupil, place.partId);
+    await server.database.query("DELETE FROM studios WHERE id = $1", [place.studioId]);
+    await sweep();
+    expect(await held(id)).toEqual([]);
+    expect(await recordOf(id)).toMatchObject({ why: "removed", deleted_at: expect.any(Date) });
+  });
+
+  it("goes with the account, and not with another's", async () => {
+    const other = await partInStudio(server, { teacher: place.teacher });
+    const [mine, others] = [await handIn(place.pupil, place.partId), await handIn(other.pupil, other.partId)];
+    await server.database.query("UPDATE users SET erase_at = now() WHERE id = $1", [place.pupil.id]);
+    await server.database.query("SELECT larkspan_jobs.add_job('eraseAccounts')");
+    await server.runJobs();
+    expect(await held(mine)).toEqual([]);
+    expect(await held(others)).toContain(others);
+    expect(await recordOf(mine)).toMatchObject({ why: "account erased", deleted_at: expect.any(Date) });
+  });
+});

@@ -1,0 +1,43 @@
+import type { DataSource } from "typeorm";
+import type { PersonalDataPart } from "../../auth/personalData.service";
+import type { ObjectStore } from "../../storage/objectStore.service";
+import { HandInsService } from "./handIns.service";
+import { soundEnding } from "./soundType";
+
+interface Kept {
+  id: string;
+  storageKey: string;
+  mediaType: string | null;
+  state: string;
+}
+
+/** What a person handed in or answered with: in the export with its sound, and gone from the storage with the account. */
+export class HandedInTakes implements PersonalDataPart {
+  readonly name = "handed-in";
+
+  constructor(
+    private readonly dataSource: DataSource,
+    private readonly objects: ObjectStore,
+  ) {}
+
+  readonly files = async (userId: string): Promise<Record<string, unknown>> => {
+    const rows: Kept[] = await this.dataSource.query(
+      `SELECT h.id, h.part_id AS "partId", h.kind, h.storage_key AS "storageKey", h.media_type AS "mediaType", h.bytes,
+              h.duration_s AS "durationS", h.effort, h.measures, h.picture, h.state,
+              h.created_at AS "createdAt", h.expires_at AS "expiresAt"
+       FROM hand_ins h JOIN studio_members m ON m.id = h.author_id WHERE m.user_id = $1 ORDER BY h.created_at`,
+      [userId],
+    );
+    const files: Record<string, unknown> = {
+      "hand-ins.json": rows.map(({ storageKey: _key, ...row }) => row),
+    };
+    for (const { id, storageKey, mediaType, state } of rows) {
+      const sound = state === "ready" ? await this.objects.read(storageKey) : null;
+      if (sound) files[`takes/${id}.${soundEnding(mediaType)}`] = sound;
+    }
+    return files;
+  };
+
+  readonly erase = (userId: string): Promise<void> =>
+    new HandInsService(this.dataSource, this.objects).deletion.erase(userId);
+}

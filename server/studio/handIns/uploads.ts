@@ -1,0 +1,104 @@
+import type { Request, Response } from "express";
+import type { Server } from "@tus/server";
+import { HttpProblem } from "../../http/httpProblem";
+import { clientConfig, type ObjectStore } from "../../storage/objectStore.service";
+import type { UploadLocks } from "./uploadLocks";
+
+/** How long a request that was told to let go of an upload may still write. */
+const drainMs = 500;
+
+interface UploadSettings {
+  objects: ObjectStore;
+  locks: UploadLocks;
+  /** called when all bytes are in the storage; what it throws is the answer to the last of them */
+  onComplete: (key: string) => Promise<void>;
+}
+
+/**
+ * Recordings on their way to the storage, by the tus protocol: a client asks how far its recording has come (HEAD) and
+ * goes on from there (PATCH). An upload is begun by the server itself when a recording is announced.
+ * @see https://tus.io/protocols/resumable-upload (1.0.0)
+ */
+export class Uploads {
+  private loaded: Promise<Server> | undefined;
+
+  constructor(private readonly settings: UploadSettings) {}
+
+  /** Begins an upload, or finds the one that has begun; tells whether all of it is there. Call it under the upload's lock. */
+  async begin(key: string, size: number): Promise<boolean> {
+    const { Upload } = await import("@tus/server");
+    const { datastore } = await this.server();
+    const begun = await datastore.getUpload(key).catch((error: unknown) => {
+      if (isTusError(error) && error.status_code === 404) return null;
+      throw error;
+    });
+    if (begun) return begun.offset === begun.size;
+    await datastore.create(new Upload({ id: key, size, offset: 0 }));
+    return false;
+  }
+
+  /** Answers HEAD and PATCH of one upload; whether the asker may is checked before. */
+  async answer(req: Request, res: Response): Promise<void> {
+    await (await this.server()).handle(req, res);
+  }
+
+  private server(): Promise<Server> {
+    this.loaded ??= this.load();
+    return this.loaded;
+  }
+
+  /** tus and the SDK are loaded when they are first needed: they are heavy. */
+  private async load(): Promise<Server> {
+    const { objects, locks, onComplete } = this.settings;
+    const [{ Server: TusServer }, { S3Store }] = await Promise.all([import("@tus/server"), import("@tus/s3-store")]);
+    /** Tells what went wrong as the rest of the API does. */
+    class Answering extends TusServer {
+      override write(...[context, headers, status, body = ""]: Parameters<Server["write"]>) {
+        if (status < 400) return super.write(context, headers, status, body);
+        headers.set("Content-Type", "application/json; charset=utf-8");
+        const said = body.startsWith("{") ? body : JSON.stringify({ code: "upload-refused", message: body.trim() });
+        return super.write(context, headers, status, said);
+      }
+    }
+    return new Answering({
+      path: "/api/uploads",
+      datastore: new S3Store({
+        s3ClientConfig: { bucket: objects.settings.bucket, ...clientConfig(objects.settings) },
+        useTags: false,
+      }),
+      locker: locks,
+      lockDrainTimeout: drainMs,
+      // Pages of other origins have no business here: none is named.
+      allowedOrigins: [],
+      getFileIdFromRequest: (_req, lastPath) => lastPath?.toLowerCase(),
+      onUploadFinish: async (_req, { id }) => {
+        await onComplete(id);
+        return {};
+      },
+      onResponseError: async (_req, error) => {
+        const problem = await problemOf(error, objects);
+        return { status_code: problem.status, body: JSON.stringify(problem.toBody()) };
+      },
+    });
+  }
+}
+
+function isTusError(error: unknown): error is { status_code: number; body: string } {
+  return typeof error === "object" && error !== null && "status_code" in error && "body" in error;
+}
+
+/** Everything that goes wrong with an upload, as the rest of the API tells it. */
+async function problemOf(error: unknown, objects: ObjectStore): Promise<HttpProblem> {
+  if (error instanceof HttpProblem) return error;
+  if (!isTusError(error)) return storageDown();
+  // The store takes every fault of the storage for an upload that is not there.
+  if (error.status_code === 404 && !(await objects.isUp().catch(() => false))) return storageDown();
+  return new HttpProblem(error.status_code, "upload-refused", error.body.trim());
+}
+
+export const storageDown = () =>
+  new HttpProblem(
+    503,
+    "storage-down",
+    "The storage of recordings does not answer. Nothing was lost; the rest is sent in a moment.",
+  );

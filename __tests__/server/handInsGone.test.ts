@@ -1,3 +1,4 @@
+import { strFromU8, unzipSync } from "fflate";
 import type { HandIn } from "../../shared/contract/studio/handIn";
 import { aHandIn, aWav, from, handIn, partInStudio, type PartInStudio } from "./partInStudio";
 import { type Person, startTestServer, type TestServer } from "./testServer";
@@ -18,8 +19,7 @@ const listed = async (person: Person): Promise<HandIn[]> =>
   (await person.get(`/api/parts/${place.partId}/hand-ins`).expect(200)).body;
 const partState = async () =>
   (await server.database.query("SELECT state, effort FROM assignment_parts WHERE id = $1", [place.partId]))[0];
-const withdraw = () =>
-  server.database.query("UPDATE studio_members SET consent_withdrawn_at = now() WHERE id = $1", [place.pupilMemberId]);
+const withdraw = () => place.pupil.put(`/api/studios/${place.studioId}/consent`, { agree: false }).expect(200);
 const sweep = async () => {
   await server.database.query("SELECT larkspan_jobs.add_job('deleteTakes')");
   await server.runJobs();
@@ -40,7 +40,7 @@ describe("without consent", () => {
     expect(await code(pupil.patch(`/api/uploads/${begun.id}`, aWav()).set(from(0)).expect(403))).toBe("not-agreed");
     for (const path of [`/api/hand-ins/${id}`, `/api/hand-ins/${id}/sound`, `/api/parts/${partId}/hand-ins`])
       expect(await code(teacher.get(path).expect(403))).toBe("not-agreed");
-    await sweep();
+    await server.runJobs();
     expect([...(await held(id)), ...(await held(begun.id))]).toEqual([]);
     expect(await recordOf(id)).toMatchObject({ why: "consent withdrawn", deleted_at: expect.any(Date) });
   });
@@ -105,12 +105,20 @@ describe("going", () => {
     expect(await held(id)).toEqual([]);
   });
 
-  it("whatever takes its row along takes its sound too: a membership, a studio, an account", async () => {
+  it("whatever takes its row along takes its sound too: a studio that is deleted, a pupil who is removed", async () => {
     const id = await handIn(place.pupil, place.partId);
-    await server.database.query("DELETE FROM studios WHERE id = $1", [place.studioId]);
-    await sweep();
-    expect(await held(id)).toEqual([]);
-    expect(await recordOf(id)).toMatchObject({ why: "removed", deleted_at: expect.any(Date) });
+    const other = await partInStudio(server);
+    const left = await handIn(other.pupil, other.partId);
+    await place.teacher.delete(`/api/studios/${place.studioId}`).expect(204);
+    await other.teacher.delete(`/api/studios/${other.studioId}/members/${other.pupilMemberId}`).expect(204);
+    await server.runJobs();
+    for (const [key, why] of [
+      [id, "removed"],
+      [left, "consent withdrawn"],
+    ] as const) {
+      expect(await held(key)).toEqual([]);
+      expect(await recordOf(key)).toMatchObject({ why, deleted_at: expect.any(Date) });
+    }
   });
 
   it("goes with the account, and not with another's", async () => {
@@ -122,5 +130,24 @@ describe("going", () => {
     expect(await held(mine)).toEqual([]);
     expect(await held(others)).toContain(others);
     expect(await recordOf(mine)).toMatchObject({ why: "account erased", deleted_at: expect.any(Date) });
+  });
+
+  it("goes along in the export, with its sound and without another's", async () => {
+    const other = await partInStudio(server, { teacher: place.teacher });
+    const wav = aWav(3000);
+    const [mine, others] = [await handIn(place.pupil, place.partId, {}, wav), await handIn(other.pupil, other.partId)];
+    const { body } = await place.pupil
+      .get("/api/account/export")
+      .buffer(true)
+      .parse((res, done) => {
+        const chunks: Buffer[] = [];
+        res.on("data", (chunk: Buffer) => chunks.push(chunk));
+        res.on("end", () => done(null, Buffer.concat(chunks)));
+      })
+      .expect(200);
+    const files = unzipSync(new Uint8Array(body as Buffer));
+    expect(Buffer.from(files[`handed-in/takes/${mine}.wav`]!).equals(wav)).toBe(true);
+    expect(Object.keys(files).join()).not.toContain(others);
+    expect(JSON.parse(strFromU8(files["handed-in/hand-ins.json"]!))).toMatchObject([{ id: mine, state: "ready" }]);
   });
 });

@@ -1,6 +1,7 @@
 import type { DataSource, EntityManager } from "typeorm";
 import type { MemberChange, StudioRole } from "../../shared/contract/studio/studio";
 import { HttpProblem, notFound } from "../http/httpProblem";
+import { wakeDeletion } from "./handIns/takeDeletion";
 import { type StudioAccessService, teaches } from "./studioAccess.service";
 import { becomeTeacher, makeOwner } from "./studios.service";
 
@@ -54,6 +55,7 @@ export class MembersService {
         [memberId],
       );
       await manager.query("DELETE FROM studio_group_members WHERE member_id = $1", [memberId]);
+      await wakeDeletion(manager);
     });
   }
 

@@ -5,6 +5,7 @@ import { HttpProblem, notFound } from "../http/httpProblem";
 import { memberShares } from "./consent/digitalConsent";
 import { consentColumns, type ConsentRow, consentOf } from "./consent/memberConsent";
 import { StudioEntity } from "./studio.entity";
+import { wakeDeletion } from "./handIns/takeDeletion";
 import type { StudioAccessService } from "./studioAccess.service";
 import { StudioMemberEntity } from "./studioMember.entity";
 
@@ -86,7 +87,10 @@ export class StudiosService {
   /** With all that was said and handed in there; songs and keys that pupils got stay theirs. */
   async remove(userId: string, studioId: string): Promise<void> {
     await this.access.owner(userId, studioId);
-    await this.dataSource.query("DELETE FROM studios WHERE id = $1", [studioId]);
+    await this.dataSource.transaction(async (manager) => {
+      await manager.query("DELETE FROM studios WHERE id = $1", [studioId]);
+      await wakeDeletion(manager);
+    });
   }
 
   /** Before an account goes: its studios pass to the co-teacher who is there longest; the others go with it. */

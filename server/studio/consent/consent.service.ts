@@ -1,5 +1,6 @@
 import type { DataSource, EntityManager } from "typeorm";
 import { HttpProblem } from "../../http/httpProblem";
+import { wakeDeletion } from "../handIns/takeDeletion";
 import { memberWaitsForGuardian } from "./digitalConsent";
 import type { GuardiansService } from "./guardians.service";
 
@@ -48,5 +49,6 @@ export class ConsentService {
        WHERE id = $1 AND consent_given_at IS NOT NULL AND consent_withdrawn_at IS NULL`,
       [memberId],
     );
+    await wakeDeletion(manager);
   }
 }

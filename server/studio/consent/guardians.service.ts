@@ -5,6 +5,7 @@ import { listWords } from "../../../shared/music/listWords";
 import { HttpProblem } from "../../http/httpProblem";
 import type { LinkTokensService } from "../../mail/linkTokens.service";
 import { enqueueMail } from "../../mail/mail.service";
+import { wakeDeletion } from "../handIns/takeDeletion";
 import { ageOfDigitalConsent, memberShares, memberWaitsForGuardian, personNeedsGuardian } from "./digitalConsent";
 
 /** To decide, and to change one's mind later. The account's own links end when its address changes; these must not. */
@@ -156,6 +157,7 @@ export class GuardiansService {
       if (!userId || !(await this.isStillHere(manager, userId))) return false;
       await manager.query("UPDATE guardians SET withdrawn_at = now() WHERE user_id = $1", [userId]);
       await manager.query("UPDATE studio_members SET guardian_agreed_at = NULL WHERE user_id = $1", [userId]);
+      await wakeDeletion(manager);
       return true;
     });
   }

@@ -4,6 +4,8 @@ import { HttpProblem, notFound } from "./httpProblem";
 
 /** Enough for a life, too few to fill a disk. */
 const mostItems = 2000;
+/** A song can be large. */
+const atOnce = 25;
 
 /** An item on its way in, in a transaction in which nobody else writes to this account. */
 export interface Saving<Item, Wishes> {
@@ -66,7 +68,7 @@ export class OwnedCollection<Item extends { id: string }, Row extends Item & Own
     item: Item,
     wishes: Wishes,
   ): Promise<{ created: boolean; item: Item }> {
-    await lockAccount(manager, userId);
+    await lockAccounts(manager, [userId]);
     const { id } = item;
     const kept = await this.find(manager, userId, id);
     const { beforeSave } = this.options;
@@ -79,9 +81,36 @@ export class OwnedCollection<Item extends { id: string }, Row extends Item & Own
     return { created, item: saved };
   }
 
+  /** New items for many people within a transaction that does more, all of them or none; few questions to the database. */
+  async addAll(
+    manager: EntityManager,
+    entries: readonly { userId: string; item: Item }[],
+    wishes: Wishes,
+  ): Promise<void> {
+    const people = entries.map(({ userId }) => userId);
+    await lockAccounts(manager, people);
+    const { beforeSave } = this.options;
+    for (let k = 0; k < entries.length; k += atOnce) {
+      const rows: QueryDeepPartialEntity<Row>[] = [];
+      for (const { userId, item } of entries.slice(k, k + atOnce)) {
+        const next = beforeSave ? await beforeSave({ manager, userId, item, kept: null, wishes }) : item;
+        rows.push({ ...(next ?? item), userId } as unknown as QueryDeepPartialEntity<Row>);
+      }
+      await manager.createQueryBuilder().insert().into(this.entity).values(rows).updateEntity(false).execute();
+    }
+    const full: object[] = await manager
+      .createQueryBuilder(this.entity, "item")
+      .select("item.userId")
+      .where("item.userId IN (:...people)", { people })
+      .groupBy("item.userId")
+      .having("count(*) > :limit", { limit: this.limit })
+      .getRawMany();
+    if (full.length > 0) throw this.tooMany();
+  }
+
   async remove(userId: string, id: string): Promise<void> {
     await this.dataSource.transaction(async (manager) => {
-      await lockAccount(manager, userId);
+      await lockAccounts(manager, [userId]);
       await this.options.beforeRemove?.(manager, userId, id);
       const { affected } = await manager
         .createQueryBuilder()
@@ -123,13 +152,12 @@ export class OwnedCollection<Item extends { id: string }, Row extends Item & Own
 
   private async refuseTooMany(manager: EntityManager, userId: string): Promise<void> {
     const count = await rowsOf(manager, this.entity, userId).getCount();
-    if (count > this.limit) {
-      throw new HttpProblem(
-        409,
-        "collection-full",
-        `An account keeps at most ${this.limit} of these. Remove one first.`,
-      );
-    }
+    if (count > this.limit) throw this.tooMany();
+  }
+
+  private tooMany(): HttpProblem {
+    const message = `An account keeps at most ${this.limit} of these. Remove one first.`;
+    return new HttpProblem(409, "collection-full", message);
   }
 }
 
@@ -138,8 +166,8 @@ export class OwnedCollection<Item extends { id: string }, Row extends Item & Own
  * not the other unique index (id, user_id); the count of items must not be overtaken; and whoever removes a song and
  * whoever decides its key would lock the two rows in opposite order.
  */
-async function lockAccount(manager: EntityManager, userId: string): Promise<void> {
-  await manager.query("SELECT FROM users WHERE id = $1 FOR NO KEY UPDATE", [userId]);
+async function lockAccounts(manager: EntityManager, people: readonly string[]): Promise<void> {
+  await manager.query("SELECT FROM users WHERE id = ANY($1) ORDER BY id FOR NO KEY UPDATE", [people]);
 }
 
 function rowsOf<Row extends OwnedEntity>(manager: EntityManager, entity: new () => Row, userId: string) {

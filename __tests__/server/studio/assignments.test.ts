@@ -91,6 +91,24 @@ describe("giving a song", () => {
     expect(server.smtp.mails).toHaveLength(0);
   });
 
+  it("stops where somebody's shelf is full, and then nobody has got anything", async () => {
+    const [full, other] = [await pupilIn(server, studioId), await pupilIn(server, studioId)];
+    const song = aSong();
+    await full.person.put(`/api/songs/${song.id}`, song).expect(201);
+    await server.database.query(
+      `INSERT INTO songs SELECT (jsonb_populate_record(s, jsonb_build_object('id', gen_random_uuid()))).*
+       FROM songs s, generate_series(2, 5000) WHERE s.id = $1`,
+      [song.id],
+    );
+    const own = aSong();
+    await teacher.put(`/api/songs/${own.id}`, own).expect(201);
+    const parts = [aPart(other.memberId), aPart(full.memberId)];
+    const { body } = await teacher.post(at(), { songId: own.id, dueOn: null, note: "", parts }).expect(409);
+    expect(body).toEqual({ code: "collection-full", message: expect.stringContaining("nobody was given") });
+    expect((await other.person.get("/api/songs").expect(200)).body).toEqual([]);
+    expect((await teacher.get(at()).expect(200)).body).toEqual([]);
+  });
+
   it("is for teachers; a co-teacher gives songs of their own shelf", async () => {
     const { person: pupil, memberId } = await pupilIn(server, studioId);
     const colleague = await Person.put(server, "teacher", true);

@@ -102,32 +102,42 @@ export class AssignmentsService {
       const { dueOn, note } = request;
       await manager.insert(AssignmentEntity, { id, studioId, assignedBy, song, dueOn, note });
       const studioName = studio?.name ?? "";
-      for (const pupil of await pupilsOf(manager, studioId, request)) {
-        const { part } = pupil;
-        const songId = await this.copies.give(manager, pupil.userId, song, studioName);
+      const pupils = await pupilsOf(manager, studioId, request);
+      const keys = pupils.map(({ userId: person, part }) => {
         const reason = `${teacher} chose it for you. ${part.reason}`.trim();
-        await this.copies.decide(manager, pupil.userId, songId, { ...part, reason });
-        const partId = randomUUID();
-        await manager.insert(AssignmentPartEntity, {
-          ...{ id: partId, studioId, assignmentId: id, memberId: pupil.memberId, songId, state: "assigned" },
-          ...{ tonic: part.tonic, shift: part.shift, instrument: part.instrument, way: part.way, note: part.note },
-        });
-        const mode = writtenKey?.mode ?? "major";
+        return { userId: person, key: { ...part, reason } };
+      });
+      const copies = await this.copies.give(manager, song, studioName, keys);
+      const parts = pupils.map((pupil) => ({ ...pupil, id: randomUUID() }));
+      await manager.insert(
+        AssignmentPartEntity,
+        parts.map(({ id: partId, memberId, userId: person, part }) => ({
+          ...{ id: partId, studioId, assignmentId: id, memberId, songId: copies.get(person) ?? null },
+          ...{
+            tonic: part.tonic,
+            shift: part.shift,
+            instrument: part.instrument,
+            way: part.way,
+            note: part.note,
+            state: "assigned" as const,
+          },
+        })),
+      );
+      for (const { id: partId, userId: person, email, part } of parts)
         await enqueueMail(manager, {
           event: `assigned:${partId}`,
           kind: "assigned",
-          to: pupil.email,
-          userId: pupil.userId,
+          to: email,
+          userId: person,
           data: {
             studio: studioName,
             song: title,
-            key: `${glyphs(part.tonic)} ${mode}`,
+            key: `${glyphs(part.tonic)} ${writtenKey?.mode ?? "major"}`,
             due: dueOn && dayWords(dueOn),
             note: [note, part.note].filter(Boolean).join("\n\n") || null,
           },
           path: `/studio/parts/${partId}`,
         });
-      }
     });
     return this.get(userId, studioId, id);
   }

@@ -44,6 +44,9 @@ export const mixtures = {
   band: "var(--band)",
   rungC: "var(--rungC)",
   selected: "var(--selected)",
+  /** keys of a piano: the white ones are the lighter at any hour */
+  whiteKey: "var(--whiteKey)",
+  blackKey: "var(--blackKey)",
 } as const;
 
 export const fonts = {
@@ -70,7 +73,8 @@ export const sizes = {
 function properties(scheme: Scheme): string {
   const plain = names.map((name) => `--${name}:${tokens[scheme][name]}`).join(";");
   const band = scheme === "morning" ? "rgba(31,122,116,.13)" : "rgba(99,207,196,.13)";
-  return `${plain};--band:${band};color-scheme:${scheme === "morning" ? "light" : "dark"}`;
+  const keys = scheme === "morning" ? ["card", "ink"] : ["line", "paper"];
+  return `${plain};--band:${band};--whiteKey:var(--${keys[0]});--blackKey:var(--${keys[1]});color-scheme:${scheme === "morning" ? "light" : "dark"}`;
 }
 
 /** The colours of one scheme for a part of a page, such as the stage, which is dark at any hour. */

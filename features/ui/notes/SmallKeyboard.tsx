@@ -114,10 +114,10 @@ function Key({ midi, onNote, dark = false }: { midi: number; onNote: (midi: numb
         alignItems: "center",
         paddingBottom: 6,
         borderWidth: 1,
-        borderColor: dark ? colors.paper : colors.inkSoft,
+        borderColor: colors.inkSoft,
         borderBottomLeftRadius: 6,
         borderBottomRightRadius: 6,
-        backgroundColor: dark ? colors.ink : colors.card,
+        backgroundColor: dark ? mixtures.blackKey : mixtures.whiteKey,
       }}
     >
       {!dark && (

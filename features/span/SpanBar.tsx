@@ -40,7 +40,7 @@ export function SpanBar({ voice, span, scale, width, words, tall = false }: Span
     <Svg width={width} height={height} viewBox={`0 0 ${width} ${height}`} role="img" aria-label={words}>
       <Hatch id={`${id}s`} pitch={4.5} line={1.2} />
       {octaves.map((midi) => (
-        <Line key={midi} x1={x(midi)} x2={x(midi)} y1={0} y2={height} stroke={mixtures.rungC} strokeWidth={1} />
+        <Line key={midi} x1={x(midi)} x2={x(midi)} y1={0} y2={height} stroke={tall ? colors.line : mixtures.rungC} strokeWidth={1} />
       ))}
       {between.map((midi) => (
         <Line

@@ -1,6 +1,7 @@
 import { useEffect, useRef, useState } from "react";
 import { View } from "react-native";
 import { Button } from "./Button";
+import type { IconName } from "./Icon";
 import { Notice } from "./Notice";
 import { Text } from "./Text";
 
@@ -13,6 +14,10 @@ export interface AskedTwiceProps {
   text: string;
   /** before the reason why it did not work: "It is not deleted." */
   failed: string;
+  /** what a screen reader says where the label alone is not enough; must contain the label */
+  accessibleName?: string;
+  /** a bin, where something is deleted */
+  icon?: IconName | null;
   /** "Delete it" and "Keep it" unless something else is asked */
   confirmLabel?: string;
   keepLabel?: string;
@@ -29,6 +34,8 @@ export function AskedTwice({
   question,
   text,
   failed,
+  accessibleName,
+  icon = "trash",
   confirmLabel = "Delete it",
   keepLabel = "Keep it",
   onRemove,
@@ -52,7 +59,15 @@ export function AskedTwice({
   if (!asked)
     return (
       <div ref={opener}>
-        <Button kind="text" small icon="trash" label={label} onPress={() => setAsked(true)} testID={testID} />
+        <Button
+          kind="text"
+          small
+          {...(icon === null ? null : { icon })}
+          {...(accessibleName === undefined ? null : { accessibleName })}
+          label={label}
+          onPress={() => setAsked(true)}
+          testID={testID}
+        />
       </div>
     );
   return (

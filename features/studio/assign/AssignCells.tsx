@@ -1,4 +1,5 @@
 import { useState } from "react";
+import { View } from "react-native";
 import type { Scale } from "@/features/span/ladderGeometry";
 import { SpanBar } from "@/features/span/SpanBar";
 import { sungIn } from "@/features/span/sungSpan";
@@ -81,7 +82,7 @@ export function PartWay({ part, ways, onDraft }: PartCellProps) {
       </Text>
     );
   return (
-    <>
+    <View style={{ alignItems: "flex-start", minWidth: 0 }}>
       <Select
         inline
         label={`Way for ${row.name}`}
@@ -93,7 +94,7 @@ export function PartWay({ part, ways, onDraft }: PartCellProps) {
       <Text variant="tiny" tone="soft">
         {instrument.name}
       </Text>
-    </>
+    </View>
   );
 }
 

@@ -24,14 +24,14 @@ export function AssignTable(props: AssignTableProps) {
 }
 
 /** px: tick, pupil, key, fit, note; band and way share the rest. */
-const columns = { tick: 40, pupil: 140, key: 140, fit: 190, note: 84 } as const;
+const columns = { tick: 40, pupil: 140, key: 140, fit: 176, note: 84 } as const;
 const taken = Object.values(columns).reduce((sum, each) => sum + each, 0);
 
 function Wide({ parts, ways, onDraft, oneKey = false, scale }: AssignRowsProps) {
   const keys = useMemo(() => parts.map(({ row }) => row.memberId), [parts]);
   const { frame, rows, before, after, measure } = useShownRows(keys, 57, nothing);
   const room = Math.min(sizes.content, useWindowDimensions().width - sizes.rail - 2 * sizes.gutterWide);
-  const width = bandsWidth(scale, Math.max(200, Math.min(440, room - taken - 250)));
+  const width = bandsWidth(scale, Math.max(200, Math.min(340, room - taken - 250)));
   return (
     <div ref={frame}>
       <table style={table} aria-rowcount={parts.length + 1} data-testid="assign-table">

@@ -11,7 +11,7 @@ export interface Dot {
 export const dotPicture = { left: 30, column: 43, top: 14, height: 128, base: 104, radius: 2.7 } as const;
 
 /** Height of a score. */
-export const yOfScore = (score: number): number => dotPicture.top + (100 - score) * 0.9;
+export const yOfScore = (score: number): number => dotPicture.top + (100 - score) * 0.978;
 
 /** Middle of a key's column. */
 export const xOfKey = (index: number): number => dotPicture.left + dotPicture.column * (index + 0.6);

@@ -3,7 +3,6 @@ import { type Href, useRouter } from "expo-router";
 import { View } from "react-native";
 import { http } from "@/features/api/httpClient";
 import { AskedTwice } from "@/features/ui/AskedTwice";
-import { Heading } from "@/features/ui/Heading";
 import { QueryState } from "@/features/ui/QueryState";
 import { Text } from "@/features/ui/Text";
 import type { Assignment } from "@/shared/contract/studio/assignment";
@@ -41,9 +40,6 @@ function Opened({ studio, assignment, now }: { studio: Studio; assignment: Assig
   return (
     <View style={{ gap: 20 }}>
       <View style={{ gap: 4 }}>
-        <Heading level={2} size={26}>
-          {title}
-        </Heading>
         <Text tone="soft">
           {[
             `Given ${dayOf(assignedAt, now)}${assignedBy === null ? "" : ` by ${assignedBy}`} to ${plural(parts.length, "pupil")}`,

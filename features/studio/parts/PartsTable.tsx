@@ -77,7 +77,7 @@ function Line({ part, now }: { part: PartRow; now: Date }) {
       testID={`part-${part.id}`}
       style={[
         { flexDirection: "row", alignItems: "center", gap: 12, minHeight: 64, paddingVertical: 8 } as TextStyle,
-        webStyle({ display: "flex" }),
+        webStyle({ display: "flex", color: colors.ink }),
       ]}
     >
       <span style={{ font: `700 20px/24px ${fonts.display}`, width: 36, flexShrink: 0 }}>
@@ -102,7 +102,13 @@ function Line({ part, now }: { part: PartRow; now: Date }) {
 }
 
 const toneColor = { soft: colors.inkSoft, plum: colors.plum, honey: colors.honeyText, lagoon: colors.lagoon } as const;
-const cellLink: CSSProperties = { display: "flex", alignItems: "center", minHeight: 48 };
+const cellLink: CSSProperties = {
+  display: "flex",
+  alignItems: "center",
+  minHeight: 48,
+  font: `600 15px/18px ${fonts.text}`,
+  color: colors.ink,
+};
 const table: CSSProperties = {
   width: "100%",
   borderCollapse: "separate",

@@ -1,5 +1,8 @@
 import type { Href } from "expo-router";
+import { useState } from "react";
 import { View } from "react-native";
+import { Button } from "@/features/ui/Button";
+import { Dialog } from "@/features/ui/Dialog";
 import { LinkButton } from "@/features/ui/LinkButton";
 import { useLayout } from "@/features/ui/useLayout";
 import type { Studio } from "@/shared/contract/studio/studio";
@@ -33,20 +36,49 @@ export function RosterActions({ studio }: { studio: Studio }) {
   );
 }
 
-/** The other pages of a studio, in one line. */
+const links: readonly [string, string, string][] = [
+  ["Assignments", "assignments", "to-assignments"],
+  ["One key for all", "key", "to-key"],
+  ["Groups", "groups", "to-groups"],
+  ["Invite", "invite", "to-invite"],
+  ["Settings", "settings", "to-settings"],
+];
+
+/** The other pages of a studio: in one line, on the phone behind a button. */
 export function StudioLinks({ studioId }: { studioId: string }) {
-  const links: readonly [string, string, string][] = [
-    ["Assignments", "assignments", "to-assignments"],
-    ["One key for all", "key", "to-key"],
-    ["Groups", "groups", "to-groups"],
-    ["Invite", "invite", "to-invite"],
-    ["Settings", "settings", "to-settings"],
-  ];
+  const phone = useLayout() === "phone";
+  const [open, setOpen] = useState(false);
+  if (!phone) return <Links studioId={studioId} />;
+  return (
+    <>
+      <Button
+        kind="text"
+        small
+        icon="more"
+        label="More of this studio"
+        expanded={open}
+        onPress={() => setOpen(true)}
+        testID="studio-more"
+      />
+      {open && (
+        <Dialog title="This studio" onClose={() => setOpen(false)}>
+          <Links studioId={studioId} stacked />
+        </Dialog>
+      )}
+    </>
+  );
+}
+
+function Links({ studioId, stacked = false }: { studioId: string; stacked?: boolean }) {
   return (
     <View
       role="navigation"
       aria-label="Of this studio"
-      style={{ flexDirection: "row", flexWrap: "wrap", columnGap: 4, marginHorizontal: -8 }}
+      style={
+        stacked
+          ? { alignItems: "flex-start" }
+          : { flexDirection: "row", flexWrap: "wrap", columnGap: 4, marginHorizontal: -8 }
+      }
     >
       {links.map(([label, page, testID]) => (
         <LinkButton

@@ -90,7 +90,10 @@ export function Assigned({ row, now }: Pick<RosterCellsProps, "row" | "now">) {
   if (!newest) return <Blank words="nothing assigned" />;
   const more = row.openCount - 1;
   return (
-    <Link href={partPath(newest.partId)} style={webStyle({ display: "grid", gridTemplateColumns: "38px 1fr" })}>
+    <Link
+      href={partPath(newest.partId)}
+      style={webStyle({ display: "grid", gridTemplateColumns: "38px 1fr", color: colors.ink })}
+    >
       <span style={{ font: `700 18px/20px ${fonts.display}` }}>{setSigns(glyphs(newest.tonic))}</span>
       <span style={{ minWidth: 0 }}>
         <span style={{ ...clip, font: `400 14px/18px ${fonts.text}` }}>{newest.title}</span>

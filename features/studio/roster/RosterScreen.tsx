@@ -53,7 +53,8 @@ export function RosterScreen({ studio, view, onView, now, children }: RosterScre
 }
 
 function Roster({ studio, roster, view, onView, now, children }: RosterScreenProps & { roster: readonly RosterRow[] }) {
-  const wide = useLayout() === "wide";
+  const layout = useLayout();
+  const [wide, phone] = [layout === "wide", layout === "phone"];
   const groups = useQuery(studioQueries.groups(studio.id)).data ?? [];
   const pupils = useMemo(() => pupilsOf(roster), [roster]);
   const scale = useMemo(() => rosterScale(pupils), [pupils]);
@@ -75,7 +76,11 @@ function Roster({ studio, roster, view, onView, now, children }: RosterScreenPro
     );
   return (
     <View style={{ gap: 16 }}>
-      <StudioLinks studioId={studio.id} />
+      {!phone && (
+        <View style={{ marginVertical: -12 }}>
+          <StudioLinks studioId={studio.id} />
+        </View>
+      )}
       {children}
       <RosterControls view={view} onView={onView} groups={groups} />
       <View style={{ gap: wide ? 4 : 0 }}>
@@ -85,7 +90,7 @@ function Roster({ studio, roster, view, onView, now, children }: RosterScreenPro
               ? plural(pupils.length, "pupil")
               : `${shown.length} of ${plural(pupils.length, "pupil")}`}
           </LiveText>
-          <CsvButton studio={studio} />
+          {phone ? <StudioLinks studioId={studio.id} /> : <CsvButton studio={studio} />}
         </View>
         {shown.length === 0 ? (
           <EmptyState
@@ -105,6 +110,7 @@ function Roster({ studio, roster, view, onView, now, children }: RosterScreenPro
         ) : (
           <RosterList rows={shown} scale={scale} now={now} />
         )}
+        {phone && <CsvButton studio={studio} />}
       </View>
     </View>
   );

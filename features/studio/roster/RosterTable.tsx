@@ -71,7 +71,7 @@ export function RosterTable({ rows: pupils, scale, now, sort, onSort }: RosterTa
             {column(null, "Instrument")}
             {column(
               "voice",
-              "Voice",
+              "Voice: comfort solid, reach hatched, the assigned song as a line",
               <div style={{ height: 18 }}>
                 <SpanScale full scale={scale} width={width} x={(midi) => stripX(midi, scale, width)} />
               </div>,

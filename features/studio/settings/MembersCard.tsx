@@ -24,11 +24,11 @@ export function MembersCard({ studio }: { studio: Studio }) {
       <QueryState query={query} title="The people could not be listed">
         {(rows) => (
           <View role="list">
-            {rows.map((row, k) => (
+            {inOrder(rows).map((row, k) => (
               <View
                 key={row.memberId}
                 role="listitem"
-                style={{ borderTopWidth: k === 0 ? 0 : 1, borderColor: colors.line, paddingVertical: 8 }}
+                style={{ borderTopWidth: k === 0 ? 0 : 1, borderColor: colors.line, paddingVertical: 2 }}
               >
                 <Member studio={studio} row={row} />
               </View>
@@ -38,6 +38,13 @@ export function MembersCard({ studio }: { studio: Studio }) {
       </QueryState>
     </Card>
   );
+}
+
+const rank: Record<StudioRole, number> = { owner: 0, "co-teacher": 1, pupil: 2 };
+
+/** Those who teach first, the owner before all. */
+function inOrder(rows: readonly RosterRow[]): RosterRow[] {
+  return [...rows].sort((a, b) => rank[a.role] - rank[b.role] || a.name.localeCompare(b.name, "en"));
 }
 
 function Member({ studio, row }: { studio: Studio; row: RosterRow }) {
@@ -50,8 +57,8 @@ function Member({ studio, row }: { studio: Studio; row: RosterRow }) {
     (value) => ({ value, label: value === "owner" ? "Owner, in your place" : roleWords[value] }),
   );
   return (
-    <View style={{ gap: 4 }}>
-      <View style={{ flexDirection: "row", flexWrap: "wrap", alignItems: "center", gap: 12, minHeight: 48 }}>
+    <View>
+      <View style={{ flexDirection: "row", flexWrap: "wrap", alignItems: "center", columnGap: 16, minHeight: 48 }}>
         <Text variant="strong" style={{ flexGrow: 1, flexShrink: 1 }}>
           {row.name}
         </Text>
@@ -67,22 +74,24 @@ function Member({ studio, row }: { studio: Studio; row: RosterRow }) {
         ) : (
           <Text tone="soft">{me ? `${roleWords[row.role]}, you` : roleWords[row.role]}</Text>
         )}
+        {!me && row.role !== "owner" && (
+          <AskedTwice
+            icon={null}
+            label="Take out"
+            accessibleName={`Take out: ${row.name}`}
+            question={`Take ${row.name} out of the studio?`}
+            text="What they handed in is deleted here. Their own account, voice and songs stay theirs."
+            failed="Nothing was changed."
+            confirmLabel="Take out"
+            keepLabel="Let stay"
+            onRemove={() => remove.mutate()}
+            busy={remove.isPending}
+            error={remove.error}
+            testID={`remove-${row.memberId}`}
+          />
+        )}
       </View>
       {change.error && <Notice kind="error">{change.error.message}</Notice>}
-      {!me && row.role !== "owner" && (
-        <AskedTwice
-          label={`Take ${row.name} out`}
-          question={`Take ${row.name} out of the studio?`}
-          text="What they handed in is deleted here. Their own account, voice and songs stay theirs."
-          failed="Nothing was changed."
-          confirmLabel="Take out"
-          keepLabel="Let stay"
-          onRemove={() => remove.mutate()}
-          busy={remove.isPending}
-          error={remove.error}
-          testID={`remove-${row.memberId}`}
-        />
-      )}
     </View>
   );
 }

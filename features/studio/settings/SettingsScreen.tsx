@@ -11,6 +11,7 @@ import { FormField } from "@/features/ui/form/FormField";
 import { Heading } from "@/features/ui/Heading";
 import { Notice } from "@/features/ui/Notice";
 import { Text } from "@/features/ui/Text";
+import { useLayout } from "@/features/ui/useLayout";
 import type { Studio } from "@/shared/contract/studio/studio";
 import { useStudioChange, useStudioRefresh } from "../studioQueries";
 import { MembersCard } from "./MembersCard";
@@ -19,15 +20,21 @@ import { checkPerson, draftOf, readDraft } from "./studioForm";
 
 /** What a teacher changes of a studio: its facts, one's own name, who teaches and who is in it, and its end. */
 export function SettingsScreen({ studio }: { studio: Studio }) {
+  const wide = useLayout() === "wide";
+  const column = wide ? ({ flexGrow: 1, flexBasis: 0, minWidth: 0, gap: 16 } as const) : ({ gap: 16 } as const);
   return (
-    <View style={{ gap: 16, maxWidth: 760 }}>
-      <FactsCard studio={studio} />
-      <NameCard studio={studio} />
-      <MembersCard studio={studio} />
-      <Card style={{ gap: 12 }}>
-        <Heading level={2}>{studio.me.role === "owner" ? "End of the studio" : "Leave the studio"}</Heading>
-        {studio.me.role === "owner" ? <DeleteStudio studio={studio} /> : <LeaveStudio studio={studio} />}
-      </Card>
+    <View style={{ flexDirection: wide ? "row" : "column", gap: wide ? 32 : 16 }}>
+      <View style={column}>
+        <FactsCard studio={studio} />
+        <NameCard studio={studio} />
+        <Card style={{ gap: 12 }}>
+          <Heading level={2}>{studio.me.role === "owner" ? "End of the studio" : "Leave the studio"}</Heading>
+          {studio.me.role === "owner" ? <DeleteStudio studio={studio} /> : <LeaveStudio studio={studio} />}
+        </Card>
+      </View>
+      <View style={column}>
+        <MembersCard studio={studio} />
+      </View>
     </View>
   );
 }
@@ -110,6 +117,7 @@ export function LeaveStudio({ studio }: { studio: Studio }) {
   });
   return (
     <AskedTwice
+      icon={null}
       label="Leave the studio"
       question={`Leave “${studio.name}”?`}
       text={

@@ -2,7 +2,7 @@ import { useState } from "react";
 import { Pressable, View } from "react-native";
 import { IconButton } from "../IconButton";
 import { Text } from "../Text";
-import { colors, sizes } from "../theme";
+import { colors, mixtures, sizes } from "../theme";
 import { webProps, webStyle } from "../webStyle";
 import { glyphs, noteName } from "@/shared/music/pitch";
 

@@ -9,6 +9,8 @@ const root = join(__dirname, "..", "..");
 /** The whole product as one runs it: the real server on a database of its own, serving the built client. */
 export interface Product {
   address: string;
+  /** does something in its database that no page does */
+  query(sql: string): Promise<void>;
   stop(): Promise<void>;
 }
 
@@ -18,6 +20,7 @@ export async function startProduct(): Promise<Product> {
   if (!admin) throw new Error("TEST_DATABASE_URL is not set: run the journeys by npm test.");
   const name = `journey_${randomUUID().replaceAll("-", "")}`;
   await asAdmin(admin, `CREATE DATABASE ${name}`);
+  const databaseUrl = Object.assign(new URL(admin), { pathname: `/${name}` }).href;
   const port = await freePort();
   const server = spawn(process.execPath, ["--import", "tsx", join(root, "server", "main.ts")], {
     cwd: root,
@@ -26,7 +29,7 @@ export async function startProduct(): Promise<Product> {
       NODE_ENV: "development",
       PORT: String(port),
       PUBLIC_URL: `http://localhost:${port}`,
-      DATABASE_URL: Object.assign(new URL(admin), { pathname: `/${name}` }).href,
+      DATABASE_URL: databaseUrl,
       TOKEN_SECRET: randomUUID() + randomUUID(),
       LOG_LEVEL: "error",
     },
@@ -35,6 +38,7 @@ export async function startProduct(): Promise<Product> {
   await ready(server);
   return {
     address: `http://localhost:${port}`,
+    query: (sql) => asAdmin(databaseUrl, sql),
     async stop() {
       const ended = new Promise<number | null>((done) => server.once("exit", (code) => done(code)));
       server.kill("SIGTERM");

@@ -3,8 +3,13 @@ import type { Page } from "playwright-core";
 /** Signs in as Maren of the demonstration, who has a voice, songs and decided keys, and goes on to `next`. */
 export async function signInAsMaren(page: Page, next: string): Promise<void> {
   await page.goto(`/account/sign-in?next=${encodeURIComponent(next)}`);
-  await page.getByTestId("email").fill("maren@orlow-quay.example");
-  await page.getByTestId("password").fill("slipway lantern");
-  await page.getByTestId("send").click();
+  await typeCredentials(page, "maren@orlow-quay.example", "slipway lantern");
   await page.waitForURL(`**${next}`);
+}
+
+/** On the page to sign in or up: types both, and sends. */
+export async function typeCredentials(page: Page, email: string, password: string): Promise<void> {
+  await page.getByTestId("email").fill(email);
+  await page.getByTestId("password").fill(password);
+  await page.getByTestId("send").click();
 }

@@ -6,6 +6,8 @@ import { startProduct, type Product } from "./product";
 export interface Stage {
   /** A fresh profile in a browser with this microphone. */
   open(microphone: Microphone, viewport?: Viewport, colorScheme?: "light" | "dark"): Promise<Profile>;
+  /** Does something in the product's database that no page does. */
+  query(sql: string): Promise<void>;
 }
 
 /**
@@ -35,6 +37,9 @@ export function setStage(browsers: "kept" | "fresh"): Stage {
       const browser = open.get(key) ?? (await launchBrowser(microphone));
       open.set(key, browser);
       return openProfile(browser, product.address, viewport, colorScheme);
+    },
+    async query(sql) {
+      await product?.query(sql);
     },
   };
 }

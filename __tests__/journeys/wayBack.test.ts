@@ -1,29 +1,11 @@
 import { Secret, TOTP } from "otpauth";
-import type { Page } from "playwright-core";
+import { tokenFor } from "./mailbox";
+import { typeCredentials } from "./signIn";
 import { setStage } from "./stage";
 
 const stage = setStage("kept");
 const first = "kettle rain window";
 const second = "harbour wall at seven";
-
-/** The token in the newest mail to an address whose link leads to this page; waits until the mail is there. */
-async function tokenFor(page: Page, email: string, path: string): Promise<string> {
-  const until = Date.now() + 20_000;
-  while (Date.now() < until) {
-    const mails = (await (await page.request.get("/dev/inbox/mails.json")).json()) as { to: string; text: string }[];
-    const link = mails.find(({ to, text }) => to === email && text.includes(`${path}#`))?.text;
-    const token = new RegExp(`${path}#([\\w-]+)`).exec(link ?? "")?.[1];
-    if (token !== undefined) return token;
-    await page.waitForTimeout(250);
-  }
-  throw new Error(`No mail with ${path} came to ${email}.`);
-}
-
-async function signIn(page: Page, email: string, password: string): Promise<void> {
-  await page.getByTestId("email").fill(email);
-  await page.getByTestId("password").fill(password);
-  await page.getByTestId("send").click();
-}
 
 test.each(["phone", "wide"] as const)(
   "on the %s a forgotten password is replaced by the mail, codes are switched on, and signing in asks for one",
@@ -31,7 +13,7 @@ test.each(["phone", "wide"] as const)(
     const { context, page, errors } = await stage.open("none", size);
     const email = `wayback.${size}@orlow.example`;
     await page.goto("/account/sign-up?next=%2Faccount");
-    await signIn(page, email, first);
+    await typeCredentials(page, email, first);
     await page.getByTestId("unconfirmed").waitFor();
     await page.getByTestId("sign-out").click();
     await page.getByTestId("to-sign-in").click();
@@ -48,7 +30,7 @@ test.each(["phone", "wide"] as const)(
 
     // The link has shown that the address is one's own, so codes can be switched on.
     await page.goto("/account/sign-in?next=%2Faccount%2Fsecurity");
-    await signIn(page, email, second);
+    await typeCredentials(page, email, second);
     await page.getByTestId("codes-on").click();
     await page.getByTestId("codes-password").fill(second);
     await page.getByTestId("codes-begin").click();
@@ -63,7 +45,7 @@ test.each(["phone", "wide"] as const)(
     await page.goto("/account/sessions");
     await page.getByTestId("end-all").click();
     await page.getByTestId("to-sign-in").click();
-    await signIn(page, email, second);
+    await typeCredentials(page, email, second);
     await page.getByTestId("code").fill("000000");
     await page.getByTestId("send").click();
     await page.locator('[data-testid="code"][aria-invalid="true"]').waitFor();

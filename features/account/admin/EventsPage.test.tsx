@@ -37,6 +37,7 @@ it("says so where nothing happened yet", async () => {
   stage.answers["GET /admin/audit"] = { status: 200, body: [] };
   show(<EventsPage />);
   expect(await screen.findByText("Nothing has happened yet.")).toBeTruthy();
+  expect(screen.queryByText("When")).toBeNull();
 });
 
 it("tells the health of queue, mail and each storage in words", async () => {

@@ -3,6 +3,9 @@ import { QueryState } from "@/features/ui/QueryState";
 import { adminQueries } from "./adminQueries";
 import { Records } from "./Records";
 
+const due = (oldestDueS: number) =>
+  oldestDueS < 1 ? "none is late" : `the oldest is due for ${Math.round(oldestDueS)} s`;
+
 /** How queue, mail and storage are. */
 export function HealthPage() {
   const query = useQuery(adminQueries.health());
@@ -15,7 +18,7 @@ export function HealthPage() {
           rows={[
             [
               "Queue",
-              `${queue.waiting} waiting, ${queue.retrying} tried again, ${queue.failed} given up; the oldest is due for ${Math.round(queue.oldestDueS)} s`,
+              `${queue.waiting} waiting, ${queue.retrying} tried again, ${queue.failed} given up; ${due(queue.oldestDueS)}`,
             ],
             [
               "Mail, seven days",

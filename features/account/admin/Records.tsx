@@ -14,22 +14,25 @@ export interface RecordsProps<Row> {
   cellsOf: (row: Row) => readonly ReactNode[];
 }
 
-/** Plain records: a table where there is room, else a card each. */
+/** Plain records: a table where there is room, else a card each; nothing where there are none. */
 export function Records<Row>({ caption, columns, rows, keyOf, cellsOf }: RecordsProps<Row>) {
   const wide = useLayout() === "wide";
+  if (rows.length === 0) return null;
   if (!wide)
     return (
       <View role="list" aria-label={caption} style={{ gap: 12 }}>
         {rows.map((row) => (
           <View key={keyOf(row)} role="listitem">
-            <Card style={{ gap: 6 }}>
+            <Card style={{ gap: 4 }}>
               {cellsOf(row).map((cell, k) => (
-                <View key={columns[k]}>
-                  <Text variant="tiny" tone="soft">
-                    {columns[k]}
-                  </Text>
+                <View key={columns[k]} style={{ flexDirection: "row", columnGap: 12, alignItems: "baseline" }}>
+                  <View style={{ width: 72 }}>
+                    <Text variant="tiny" tone="soft">
+                      {columns[k]}
+                    </Text>
+                  </View>
                   {typeof cell === "string" ? (
-                    <Text variant="small" style={{ overflowWrap: "anywhere" } as object}>
+                    <Text variant="small" style={{ flexShrink: 1, overflowWrap: "anywhere" } as object}>
                       {cell}
                     </Text>
                   ) : (

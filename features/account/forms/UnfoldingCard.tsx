@@ -44,7 +44,7 @@ export function UnfoldingCard({
     <Card style={{ gap: 12 }}>
       <Heading level={2}>{title}</Heading>
       {children}
-      <div ref={foot}>
+      <div ref={foot} style={{ display: "flex", flexDirection: "column" }}>
         {open && form(fold)}
         <View style={start}>
           {open ? (

@@ -74,6 +74,17 @@ describe("agreeing", () => {
     await teacher.post(`/api/parts/${partId}/comments`, { text: "Why?" }).expect(403);
     expect((await teacher.put(`/api/parts/${partId}`, { state: "accepted" }).expect(403)).body.code).toBe("not-agreed");
     expect((await teacher.get(`/api/parts/${partId}`).expect(200)).body).toMatchObject({ way: null, instrument: null });
+    await server.database.query(
+      "UPDATE assignment_parts SET state = 'handed-in', handed_in_at = now(), effort = 5 WHERE id = $1",
+      [partId],
+    );
+    const [given] = (await teacher.get(`/api/studios/${studioId}/assignments`).expect(200)).body;
+    expect(given.counts).toEqual({ parts: 1, waiting: 0, accepted: 0 });
+    const table = (await teacher.get(`/api/studios/${studioId}/assignments/${given.id}`).expect(200)).body;
+    expect(table.parts).toMatchObject([
+      { shares: false, state: "assigned", way: null, instrument: null, lastTake: null },
+    ]);
+    expect((await teacher.get("/api/studios").expect(200)).body[0].counts.waiting).toBe(0);
     const csv = (await teacher.get(`/api/studios/${studioId}/roster.csv`).expect(200)).text;
     expect(csv).toContain('"Lowri Tate"');
     expect(csv).not.toContain("banjo");

@@ -13,7 +13,7 @@ import { RowChoice, RowMenuButton, type RowActions } from "./RowTools";
 import { listingWords, playedWords, shownKey, spanWords, sungSpan, type ShelfKey } from "./shelfRow";
 import { SpanBar } from "@/features/span/SpanBar";
 import { shelfScale } from "./shelfScale";
-import { useShownRows } from "@/features/ui/useShownRows";
+import { useShownRows } from "@/features/ui/table/useShownRows";
 
 export interface SongRowsProps {
   songs: readonly SongListing[];

@@ -2,7 +2,7 @@ import { memo, useMemo, useState } from "react";
 import { View } from "react-native";
 import { Text } from "@/features/ui/Text";
 import { colors } from "@/features/ui/theme";
-import { useShownRows } from "@/features/ui/useShownRows";
+import { useShownRows } from "@/features/ui/table/useShownRows";
 import { GiveTick, OneKey, PartBand, PartFit, PartKey, PartNote, PartWay } from "./AssignCells";
 import type { AssignRowsProps, CellsProps } from "./assignRows";
 

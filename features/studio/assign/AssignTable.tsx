@@ -2,10 +2,12 @@ import { memo, useMemo, type CSSProperties } from "react";
 import { useWindowDimensions } from "react-native";
 import { SpanScale } from "@/features/span/SpanScale";
 import { stripX } from "@/features/span/VoiceStrip";
-import { colors, fonts, sizes } from "@/features/ui/theme";
+import { ShownRows } from "@/features/ui/table/ShownRows";
+import { cell, stuckHead, table } from "@/features/ui/table/tableStyles";
+import { useShownRows } from "@/features/ui/table/useShownRows";
+import { fonts, sizes } from "@/features/ui/theme";
 import { unseen } from "@/features/ui/unseen";
 import { useLayout } from "@/features/ui/useLayout";
-import { useShownRows } from "@/features/ui/useShownRows";
 import { bandsWidth, rosterScale } from "../roster/rosterScale";
 import { GiveTick, OneKey, PartBand, PartFit, PartKey, PartNote, PartWay } from "./AssignCells";
 import { AssignList } from "./AssignList";
@@ -29,7 +31,7 @@ const taken = Object.values(columns).reduce((sum, each) => sum + each, 0);
 
 function Wide({ parts, ways, onDraft, oneKey = false, scale }: AssignRowsProps) {
   const keys = useMemo(() => parts.map(({ row }) => row.memberId), [parts]);
-  const { frame, rows, before, after, measure } = useShownRows(keys, 57, nothing);
+  const { frame, ...shown } = useShownRows(keys, 57, nothing);
   const room = Math.min(sizes.content, useWindowDimensions().width - sizes.rail - 2 * sizes.gutterWide);
   const width = bandsWidth(scale, Math.max(200, Math.min(340, room - taken - 250)));
   return (
@@ -46,62 +48,48 @@ function Wide({ parts, ways, onDraft, oneKey = false, scale }: AssignRowsProps) 
         <thead>
           <tr aria-rowindex={1}>
             {!oneKey && (
-              <th scope="col" style={th}>
+              <th scope="col" style={stuckHead}>
                 <span style={unseen}>Chosen</span>
               </th>
             )}
-            <th scope="col" style={th}>
+            <th scope="col" style={stuckHead}>
               Pupil
             </th>
-            <th scope="col" style={th}>
+            <th scope="col" style={stuckHead}>
               <span style={unseen}>The song in the voice</span>
               <SpanScale full scale={scale} width={width} x={(midi) => stripX(midi, scale, width)} />
             </th>
-            <th scope="col" style={th}>
+            <th scope="col" style={stuckHead}>
               Key
             </th>
-            <th scope="col" style={th}>
+            <th scope="col" style={stuckHead}>
               How it lies
             </th>
-            <th scope="col" style={th}>
+            <th scope="col" style={stuckHead}>
               Way
             </th>
             {!oneKey && (
-              <th scope="col" style={th}>
+              <th scope="col" style={stuckHead}>
                 <span style={unseen}>Note</span>
               </th>
             )}
           </tr>
         </thead>
-        <tbody>
-          {before > 0 && (
-            <tr aria-hidden style={{ height: before }}>
-              <td />
-            </tr>
-          )}
-          {rows.map(({ index, key }) => {
+        <ShownRows {...shown} testID="assign-row">
+          {(index) => {
             const part = parts[index];
-            return (
-              part && (
-                <tr key={key} ref={measure} data-index={index} aria-rowindex={index + 2} data-testid="assign-row">
-                  <Cells
-                    part={part}
-                    ways={ways.get(part.row.memberId)}
-                    onDraft={onDraft}
-                    oneKey={oneKey}
-                    scale={scale}
-                    width={width}
-                  />
-                </tr>
-              )
-            );
-          })}
-          {after > 0 && (
-            <tr aria-hidden style={{ height: after }}>
-              <td />
-            </tr>
-          )}
-        </tbody>
+            return part ? (
+              <Cells
+                part={part}
+                ways={ways.get(part.row.memberId)}
+                onDraft={onDraft}
+                oneKey={oneKey}
+                scale={scale}
+                width={width}
+              />
+            ) : null;
+          }}
+        </ShownRows>
       </table>
     </div>
   );
@@ -130,30 +118,4 @@ const Cells = memo(function Cells({ part, ways, onDraft, oneKey, scale, width }:
   );
 });
 
-const table: CSSProperties = {
-  width: "100%",
-  tableLayout: "fixed",
-  borderCollapse: "separate",
-  borderSpacing: 0,
-  font: `400 14px/18px ${fonts.text}`,
-  color: colors.ink,
-};
-const th: CSSProperties = {
-  position: "sticky",
-  top: 0,
-  zIndex: 2,
-  background: colors.paper,
-  borderBottom: `1px solid ${colors.ink}`,
-  font: `500 12px/16px ${fonts.text}`,
-  color: colors.inkSoft,
-  textAlign: "left",
-  verticalAlign: "bottom",
-  padding: "0 12px 6px 0",
-};
-const td: CSSProperties = {
-  borderBottom: `1px solid ${colors.line}`,
-  padding: "0 12px 0 0",
-  height: 56,
-  verticalAlign: "middle",
-  overflowWrap: "anywhere",
-};
+const td: CSSProperties = { ...cell, height: 56 };

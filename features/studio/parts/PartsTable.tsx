@@ -3,6 +3,7 @@ import type { CSSProperties } from "react";
 import { View, type TextStyle } from "react-native";
 import { setSigns } from "@/features/ui/textSigns";
 import { Text } from "@/features/ui/Text";
+import { cell, head, table } from "@/features/ui/table/tableStyles";
 import { colors, fonts } from "@/features/ui/theme";
 import { unseen } from "@/features/ui/unseen";
 import { useLayout } from "@/features/ui/useLayout";
@@ -31,12 +32,12 @@ export function PartsTable({ parts, now }: { parts: readonly PartRow[]; now: Dat
       </View>
     );
   return (
-    <table style={table} data-testid="assignment-parts">
+    <table style={{ ...table, tableLayout: "auto" }} data-testid="assignment-parts">
       <caption style={unseen}>Each pupil with key, way, state and last take</caption>
       <thead>
         <tr>
           {["Pupil", "Key", "Way", "State", "Last take, and how it felt"].map((label) => (
-            <th key={label} scope="col" style={th}>
+            <th key={label} scope="col" style={head}>
               {label}
             </th>
           ))}
@@ -109,24 +110,4 @@ const cellLink: CSSProperties = {
   font: `600 15px/18px ${fonts.text}`,
   color: colors.ink,
 };
-const table: CSSProperties = {
-  width: "100%",
-  borderCollapse: "separate",
-  borderSpacing: 0,
-  font: `400 14px/20px ${fonts.text}`,
-  color: colors.ink,
-};
-const th: CSSProperties = {
-  borderBottom: `1px solid ${colors.ink}`,
-  font: `500 12px/16px ${fonts.text}`,
-  color: colors.inkSoft,
-  textAlign: "left",
-  padding: "0 12px 6px 0",
-};
-const td: CSSProperties = {
-  borderBottom: `1px solid ${colors.line}`,
-  padding: "0 12px 0 0",
-  height: 48,
-  verticalAlign: "middle",
-  overflowWrap: "anywhere",
-};
+const td: CSSProperties = { ...cell, height: 48 };

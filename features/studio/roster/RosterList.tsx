@@ -4,7 +4,7 @@ import { SpanScale } from "@/features/span/SpanScale";
 import { stripX } from "@/features/span/VoiceStrip";
 import { Text } from "@/features/ui/Text";
 import { colors, fonts } from "@/features/ui/theme";
-import { useShownRows } from "@/features/ui/useShownRows";
+import { useShownRows } from "@/features/ui/table/useShownRows";
 import { dayOf } from "../dayWords";
 import { EffortBars } from "./EffortBars";
 import { Assigned, Band, LookAfter, type RosterCellsProps } from "./RosterCells";

@@ -33,6 +33,7 @@ import { mailRoutes } from "./mail/mail.router";
 import { handInsRoutes } from "./studio/handIns/handIns.router";
 import { type ObjectStore, storageOrigin } from "./storage/objectStore.service";
 import { studioRoutes } from "./studio/studio.router";
+import { studioParts } from "./studio/studioParts";
 import { voicesRoutes } from "./voices/voices.router";
 import { playerWishesRoutes } from "./ways/playerWishes.router";
 
@@ -58,7 +59,8 @@ export function createApp(dataSource: DataSource, logger: Logger, settings: AppS
   const parts = authParts(dataSource, settings);
   authRoutes(api, parts);
   recoveryRoutes(api, parts);
-  accountRoutes(api, parts, createPersonalData(dataSource, settings));
+  const studio = studioParts(dataSource, settings);
+  accountRoutes(api, parts, createPersonalData(dataSource, settings), studio.guardians);
   emailRoutes(api, parts);
   secondFactorRoutes(api, parts);
   voicesRoutes(api, dataSource);
@@ -71,7 +73,7 @@ export function createApp(dataSource: DataSource, logger: Logger, settings: AppS
   chartsRoutes(api, dataSource);
   mailRoutes(api, dataSource, settings);
   sheetsRoutes(api, dataSource);
-  studioRoutes(api, dataSource, settings);
+  studioRoutes(api, studio);
   adminRoutes(api, dataSource, {
     tokenSecret: settings.tokenSecret,
     stores: [{ name: "recordings", isUp: () => settings.objects.isUp() }],

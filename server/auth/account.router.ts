@@ -12,6 +12,7 @@ import { currentSessionId, currentUserId } from "../http/currentUser";
 import { notFound } from "../http/httpProblem";
 import { idIn } from "../http/ownedCollection.router";
 import { parse } from "../http/parse";
+import type { GuardiansService } from "../studio/consent/guardians.service";
 import { addressOf, type AuthParts, tellOwner } from "./authParts";
 import { askForErasure } from "./erasure";
 import { refuseCommonPassword } from "./newPassword";
@@ -22,8 +23,15 @@ const facts = { name: "PersonFacts", schema: personFacts };
 const wrongPassword = { description: "The password is wrong (wrong-password)." };
 const tooMany = { description: "Tried too often (too-many-tries); Retry-After tells the seconds to wait." };
 
+type Guardians = Pick<GuardiansService, "refuseOlder">;
+
 /** What one does with one's own account: sessions, password, taking everything along, leaving. */
-export function accountRoutes(api: Api, parts: AuthParts, personalData: readonly PersonalDataPart[]): void {
+export function accountRoutes(
+  api: Api,
+  parts: AuthParts,
+  personalData: readonly PersonalDataPart[],
+  guardians: Guardians,
+): void {
   const { dataSource, accounts, sessions, limits, log } = parts;
 
   api.route(
@@ -48,10 +56,14 @@ export function accountRoutes(api: Api, parts: AuthParts, personalData: readonly
       summary: "Tell birth year and country, or take them back",
       signedIn: true,
       body: facts,
-      answers: { 200: { description: "Saved.", schema: facts } },
+      answers: {
+        200: { description: "Saved.", schema: facts },
+        409: { description: "A guardian decides in a studio, and this would make them needless (guardian-decides)." },
+      },
     },
     async (req, res) => {
       const told = parse(personFacts, req.body);
+      await guardians.refuseOlder(currentUserId(res), told);
       await accounts.setFacts(currentUserId(res), told);
       res.json(told);
     },

@@ -1,4 +1,3 @@
-import type { DataSource } from "typeorm";
 import type { Api } from "../http/api";
 import { assignmentsRoutes } from "./assignments/assignments.router";
 import { partsRoutes } from "./assignments/parts.router";
@@ -6,12 +5,11 @@ import { consentRoutes } from "./consent/consent.router";
 import { groupsRoutes } from "./groups/groups.router";
 import { invitesRoutes } from "./invites/invites.router";
 import { rosterRoutes } from "./roster/roster.router";
-import { studioParts } from "./studioParts";
+import type { StudioParts } from "./studioParts";
 import { studiosRoutes } from "./studios.router";
 
 /** Teachers and their pupils. */
-export function studioRoutes(api: Api, dataSource: DataSource, settings: { tokenSecret: string }): void {
-  const parts = studioParts(dataSource, settings);
+export function studioRoutes(api: Api, parts: StudioParts): void {
   studiosRoutes(api, parts);
   rosterRoutes(api, parts);
   groupsRoutes(api, parts);

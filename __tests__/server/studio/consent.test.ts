@@ -225,6 +225,28 @@ describe("a guardian", () => {
     expect(server.smtp.mails).toHaveLength(0);
   });
 
+  it("cannot be got rid of by telling another birth year or country, in two steps neither; by leaving, yes", async () => {
+    const { person, memberId, token } = await asked();
+    const tell = (birthYear: number | null, country: string | null = null) =>
+      person.put("/api/account/person", { birthYear, country });
+    for (const told of [1980, null, thisYear - 17])
+      expect((await tell(told).expect(409)).body).toMatchObject({
+        code: "guardian-decides",
+        fields: [{ path: "birthYear" }],
+      });
+    await clearTraces(server);
+    await agree(person, false).expect(200);
+    await tell(1980).expect(409);
+    await agree(person, true).expect(200);
+    await server.runJobs();
+    expect(server.smtp.mails).toEqual([]);
+    await post("confirm", token).expect(204);
+    await tell(1980).expect(409);
+    await tell(thisYear - 11, "DE").expect(200);
+    await person.delete(`/api/studios/${studioId}/members/${memberId}`).expect(204);
+    await tell(1980).expect(200);
+  });
+
   it("is needed no more once the pupil is old enough", async () => {
     const { person, memberId } = await asked();
     await server.database.query("UPDATE users SET birth_year = birth_year - 5 WHERE id = $1", [person.id]);

@@ -17,13 +17,14 @@ export class ConsentService {
     );
   }
 
-  /** A guardian who is known already is asked at once. */
+  /** A guardian who is known already is asked at once, by one mail for each studio however often a pupil changes their mind. */
   async give(manager: EntityManager, memberId: string, userId: string): Promise<void> {
-    const [person]: { told: boolean }[] = await manager.query(
-      "SELECT birth_year IS NOT NULL AS told FROM users WHERE id = $1",
-      [userId],
+    const [before]: { told: boolean; firstTime: boolean }[] = await manager.query(
+      `SELECT u.birth_year IS NOT NULL AS told, m.consent_given_at IS NULL AS "firstTime"
+       FROM studio_members m JOIN users u ON u.id = m.user_id WHERE m.id = $1 FOR UPDATE OF m`,
+      [memberId],
     );
-    if (!person?.told)
+    if (!before?.told)
       throw new HttpProblem(
         409,
         "birth-year-needed",
@@ -40,7 +41,7 @@ export class ConsentService {
       `SELECT FROM studio_members m JOIN users u ON u.id = m.user_id WHERE m.id = $1 AND ${memberWaitsForGuardian}`,
       [memberId],
     );
-    if (waiting) await this.guardians.askAgain(manager, userId);
+    if (waiting && before.firstTime) await this.guardians.askAgain(manager, userId);
   }
 
   private async withdraw(manager: EntityManager, memberId: string): Promise<void> {

@@ -40,3 +40,5 @@ const waitsSql = (members: string, users: string) =>
 export const memberShares = sharesSql("m", "u");
 export const memberWaitsForGuardian = waitsSql("m", "u");
 export const personNeedsGuardian = needsGuardianSql("u");
+/** The same for what somebody `told` wants to tell. */
+export const toldNeedsGuardian = needsGuardianSql("told");

@@ -1,4 +1,5 @@
 import type { DataSource, EntityManager } from "typeorm";
+import type { PersonFacts } from "../../../shared/contract/account";
 import type { GuardianLook, GuardianState } from "../../../shared/contract/studio/consent";
 import { whatTeachersSee } from "../../../shared/contract/studio/whatTeachersSee";
 import { listWords } from "../../../shared/music/listWords";
@@ -6,7 +7,13 @@ import { HttpProblem } from "../../http/httpProblem";
 import type { LinkTokensService } from "../../mail/linkTokens.service";
 import { enqueueMail } from "../../mail/mail.service";
 import { wakeDeletion } from "../handIns/takeDeletion";
-import { ageOfDigitalConsent, memberShares, memberWaitsForGuardian, personNeedsGuardian } from "./digitalConsent";
+import {
+  ageOfDigitalConsent,
+  memberShares,
+  memberWaitsForGuardian,
+  personNeedsGuardian,
+  toldNeedsGuardian,
+} from "./digitalConsent";
 
 /** To decide, and to change one's mind later. The account's own links end when its address changes; these must not. */
 const askPurpose = "guardian-ask";
@@ -60,6 +67,24 @@ export class GuardiansService {
       confirmedAt: row?.waits ? null : instant(row?.confirmedAt),
       withdrawnAt: instant(row?.withdrawnAt),
     };
+  }
+
+  /**
+   * Whoever agreed in a studio and was too young to do so alone cannot become old enough by another birth year. A wrong
+   * one is mended by leaving and being invited again, so that a teacher knows of it.
+   */
+  async refuseOlder(userId: string, { birthYear, country }: PersonFacts): Promise<void> {
+    const rows: object[] = await this.dataSource.query(
+      `SELECT FROM users u, (SELECT $2::smallint AS birth_year, $3::text AS country) told
+       WHERE u.id = $1 AND ${personNeedsGuardian} AND NOT coalesce(${toldNeedsGuardian}, false)
+         AND EXISTS (SELECT FROM studio_members m
+                     WHERE m.user_id = u.id AND m.left_at IS NULL AND m.consent_given_at IS NOT NULL)`,
+      [userId, birthYear, country],
+    );
+    if (rows.length === 0) return;
+    const message =
+      "In a studio a guardian decides for you. If the year is wrong, leave it and ask to be invited again.";
+    throw new HttpProblem(409, "guardian-decides", message, [{ path: "birthYear", message }]);
   }
 
   /** Names a guardian and writes to them; also to write once more, or to somebody else. */

@@ -3,6 +3,7 @@ import { Navigator, usePathname } from "expo-router";
 import { useEffect } from "react";
 import { queryClient } from "@/features/api/queryClient";
 import { SessionProvider, useSession } from "@/features/api/SessionProvider";
+import { resumeUnsent } from "@/features/studio/takes/resumeUnsent";
 import { fetchWhenIdle, type LazyPart } from "@/features/ui/fetchWhenIdle";
 import { MissingChunkBoundary } from "@/features/ui/MissingChunkBoundary";
 import { Shell } from "@/features/ui/Shell";
@@ -49,6 +50,10 @@ function Surroundings() {
   const { account } = useSession();
   const path = usePathname();
   useEffect(() => fetchWhenIdle(parts), []);
+  const accountId = account?.id;
+  useEffect(() => {
+    if (accountId !== undefined) resumeUnsent(accountId);
+  }, [accountId]);
   return (
     <Shell initial={account ? account.email.charAt(0).toUpperCase() : null}>
       <Navigator>

@@ -95,7 +95,7 @@ describe("handing in", () => {
     for (const [changes, path] of [
       [{ bytes: 20_000_001 }, "bytes"],
       [{ durationS: 601 }, "durationS"],
-      [{ picture: { waveform: Array<number>(401).fill(0), trail: [] } }, "picture.waveform"],
+      [{ picture: { waveform: Array<number>(401).fill(0), trail: [], tune: [] } }, "picture.waveform"],
     ] as const) {
       const { body } = await place.pupil
         .post(`/api/parts/${place.partId}/hand-ins`, aHandIn(100, changes as object))

@@ -73,7 +73,7 @@ export function aHandIn(bytes: number, changes: Partial<HandInRequest> = {}): Ha
     durationS: 12.5,
     effort: 2,
     measures: null,
-    picture: { waveform: [0, 0.5, 1], trail: [{ t: 0.5, midi: 57.1 }] },
+    picture: { waveform: [0, 0.5, 1], trail: [{ t: 0.5, midi: 57.1 }], tune: [] },
     ...changes,
   };
 }

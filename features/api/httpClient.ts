@@ -105,6 +105,12 @@ async function answerTo(method: string, path: string, body?: unknown): Promise<R
   return renewed === null ? answer : send(method, path, body, renewed);
 }
 
+/** For what is sent in another way than by this client: the header by which the server knows who asks; null for nobody. */
+async function authorization(): Promise<string | null> {
+  if (access && Date.now() > access.endsAt) await refresh();
+  return access && `Bearer ${access.token}`;
+}
+
 async function request<T>(method: string, path: string, body?: unknown): Promise<T> {
   return read<T>(await answerTo(method, path, body));
 }
@@ -144,6 +150,7 @@ export const http = {
   /** a POST without the access token */
   open,
   download,
+  authorization,
   authenticate,
   refresh,
   onSession,

@@ -3,6 +3,7 @@ import { http } from "@/features/api/httpClient";
 import type { Assignment, AssignmentListing, Comment, Part, PartListing } from "@/shared/contract/studio/assignment";
 import type { GuardianState } from "@/shared/contract/studio/consent";
 import type { StudioGroup } from "@/shared/contract/studio/group";
+import type { HandIn } from "@/shared/contract/studio/handIn";
 import type { Invite } from "@/shared/contract/studio/invite";
 import type { RosterRow } from "@/shared/contract/studio/roster";
 import type { Studio } from "@/shared/contract/studio/studio";
@@ -23,6 +24,7 @@ export const studioQueries = {
   parts: () => ask<PartListing[]>("/parts"),
   part: (id: string) => ask<Part>(`/parts/${id}`),
   comments: (partId: string) => ask<Comment[]>(`/parts/${partId}/comments`),
+  handIns: (partId: string) => ask<HandIn[]>(`/parts/${partId}/hand-ins`),
   guardian: () => ask<GuardianState>("/guardian"),
 };
 

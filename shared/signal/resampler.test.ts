@@ -5,14 +5,18 @@ import { createResampler } from "./resampler";
 const tone = (hz: number, rate: number, seconds = 0.5) =>
   Float32Array.from({ length: Math.round(rate * seconds) }, (_, i) => Math.sin((2 * Math.PI * hz * i) / rate));
 
-test.each([8000, 11025, 16000, 22050, 44100, 48000, 96000, 192000])("a voice's tones pass at %i Hz, at their own time", (rate) => {
-  const out = createResampler(rate).push(tone(440, rate));
-  expect(out.length).toBeGreaterThan(3950);
-  let worst = 0;
-  for (let i = 1600; i < 3900; i++) worst = Math.max(worst, Math.abs(out[i]! - Math.sin((2 * Math.PI * 440 * i) / 8000)));
-  expect(worst).toBeLessThan(0.15);
-  expect(levelDbfs(out, 1600, 3900)).toBeCloseTo(0, 1);
-});
+test.each([8000, 11025, 16000, 22050, 44100, 48000, 96000, 192000])(
+  "a voice's tones pass at %i Hz, at their own time",
+  (rate) => {
+    const out = createResampler(rate).push(tone(440, rate));
+    expect(out.length).toBeGreaterThan(3950);
+    let worst = 0;
+    for (let i = 1600; i < 3900; i++)
+      worst = Math.max(worst, Math.abs(out[i]! - Math.sin((2 * Math.PI * 440 * i) / 8000)));
+    expect(worst).toBeLessThan(0.15);
+    expect(levelDbfs(out, 1600, 3900)).toBeCloseTo(0, 1);
+  },
+);
 
 test("what would fold into the voice's band is taken out", () => {
   for (const hz of [5000, 7600, 8400, 15000]) {

@@ -7,6 +7,7 @@ import { useSongKeys } from "@/features/keys/useSongKeys";
 import { ChartView } from "@/features/songs/ChartView";
 import { SongState } from "@/features/songs/SongState";
 import { songQueries } from "@/features/songs/songQueries";
+import { HandInTake } from "@/features/studio/takes/HandInTake";
 import { useTryTake } from "@/features/voice/tryTake/useTryTake";
 import { useSingingVoice } from "@/features/voice/useSingingVoice";
 import type { Song } from "@/shared/contract/song";
@@ -27,6 +28,7 @@ function TryIt({ song }: { song: Song }) {
   const singer = useSingingVoice();
   const keys = useSongKeys(song, singer);
   const { key, shift } = askedKey(song, keys.inHand, asked.key, asked.shift);
+  const recorder = useTryTake(song.id);
   return (
     <TryScreen
       song={song}
@@ -35,8 +37,9 @@ function TryIt({ song }: { song: Song }) {
       keys={keys}
       singer={singer.voice}
       voice={singer.forKeys}
-      recorder={useTryTake(song.id)}
+      recorder={recorder}
       draw={drawLine}
+      handIn={(take) => <HandInTake songId={song.id} take={take} sound={recorder.toSend} />}
       onKey={({ tonic, shift: semitones }) => router.setParams({ key: tonic, shift: String(semitones) })}
     />
   );

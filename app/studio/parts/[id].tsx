@@ -2,6 +2,7 @@ import { useLocalSearchParams } from "expo-router";
 import { useMemo } from "react";
 import { SignedIn } from "@/features/account/SignedIn";
 import { PartPage } from "@/features/studio/parts/PartPage";
+import { PartTakes } from "@/features/studio/takes/PartTakes";
 import { PartScreen } from "@/features/studio/parts/PartScreen";
 
 export default function PartRoute() {
@@ -17,7 +18,9 @@ export default function PartRoute() {
         </SignedIn>
       )}
     >
-      {(part) => <PartScreen key={part.id} part={part} now={now} takes={() => null} />}
+      {(part) => (
+        <PartScreen key={part.id} part={part} now={now} takes={(place) => <PartTakes {...place} now={now} />} />
+      )}
     </PartPage>
   );
 }

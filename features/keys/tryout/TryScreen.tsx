@@ -69,6 +69,7 @@ export function TryScreen(props: TryScreenProps) {
           playback={recorder.playback}
           crumb={crumb}
           onKept={setKeptId}
+          handIn={props.handIn}
         />
       ) : keptId !== null && state.step === "idle" ? (
         <TryKept {...props} sign={sign} keptId={keptId} crumb={crumb} onOn={() => setKeptId(null)} />

@@ -4,6 +4,7 @@ import type { SingingVoice } from "@/shared/keys/keyScore";
 import type { KeyName } from "@/shared/music/keyName";
 import type { ChartLine } from "@/shared/songs/chart";
 import type { SongKeys } from "../useSongKeys";
+import type { SungToHandIn } from "./report/sungToHandIn";
 import type { TryRecorder } from "./singing/tryRecorder";
 import type { TriedKey } from "./setup/tryWishes";
 
@@ -21,4 +22,6 @@ export interface TryScreenProps {
   /** a line of the chart, chords over its syllables */
   draw: (line: ChartLine) => ReactNode;
   onKey: (key: TriedKey) => void;
+  /** under a measured take: what else can be done with it */
+  handIn?: (take: SungToHandIn) => ReactNode;
 }

@@ -2,6 +2,7 @@ import { useCallback, useEffect, useMemo, useReducer, useRef, useState } from "r
 import { createCapture, type Capture } from "../recorder/capture";
 import { createLiveSound, timeOf, type LiveSound } from "../recorder/liveSound";
 import { idle, recorder, type HeardTake, type RecorderEvent, type RecorderState } from "../recorder/recorder";
+import { soundToSend, type SoundToSend } from "../recorder/sound/soundToSend";
 import { longestTryS } from "../recorder/takeProtocol";
 import {
   dropStale,
@@ -44,6 +45,8 @@ export interface TryTake {
   /** the page's clock (performance.now) at second 0 of the take; null before anything arrived */
   startedMs(): number | null;
   playback: Playback;
+  /** makes a file of the take that is heard, to be handed in; null where there is none */
+  toSend(): Promise<SoundToSend | null>;
 }
 
 /** Less than this is not worth judging after a reload. */
@@ -135,8 +138,9 @@ export function useTryTake(place: string): TryTake {
   );
   const startedMs = useCallback(() => started.current, []);
   const playback = usePlayback(heard?.pcm ?? nothing, heard?.sampleRate ?? 48_000);
+  const toSend = useCallback(async () => heard && soundToSend(heard.pcm, heard.sampleRate), [heard]);
   const shown = useMemo(() => shownState(state), [state]);
-  return { state: shown, restoring, sing, stop, leave, now, listen, startedMs, playback };
+  return { state: shown, restoring, sing, stop, leave, now, listen, startedMs, playback, toSend };
 }
 
 function shownState(state: RecorderState): TryTakeState {

@@ -1,5 +1,6 @@
 import type { DataSource, EntityManager } from "typeorm";
-import { type HandIn, type HandInRequest, mostTakeBytes, type SoundLink } from "../../../shared/contract/studio/handIn";
+import type { HandIn, HandInRequest, SoundLink } from "../../../shared/contract/studio/handIn";
+import { mostTakeBytes } from "../../../shared/contract/studio/takeLimits";
 import { HttpProblem, notFound } from "../../http/httpProblem";
 import type { ObjectStore } from "../../storage/objectStore.service";
 import { type PartAccess, PartAccessService, refuseHidden, refuseUnshared } from "../assignments/partAccess.service";

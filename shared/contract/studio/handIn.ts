@@ -1,9 +1,6 @@
 import { z } from "zod";
 import { songTry } from "../try";
-
-/** A recording handed in may have so many bytes, and last so long. */
-export const mostTakeBytes = 20_000_000;
-export const mostTakeS = 600;
+import { mostTakeBytes, mostTakeS } from "./takeLimits";
 
 /** The sound and the pitch of a recording as a picture; made on the device that recorded it. */
 export const takePicture = z.strictObject({
@@ -11,6 +8,16 @@ export const takePicture = z.strictObject({
   waveform: z.array(z.number().min(0).max(1)).max(400),
   /** sung pitch: seconds from the beginning, and fractional MIDI numbers */
   trail: z.array(z.strictObject({ t: z.number().min(0).max(mostTakeS), midi: z.number().min(0).max(127) })).max(4000),
+  /** the tune where it was sung, in the singer's octave; empty where it is not known */
+  tune: z
+    .array(
+      z.strictObject({
+        t: z.number().min(0).max(mostTakeS),
+        durationS: z.number().min(0).max(mostTakeS),
+        midi: z.number().min(0).max(127),
+      }),
+    )
+    .max(2000),
 });
 export type TakePicture = z.infer<typeof takePicture>;
 

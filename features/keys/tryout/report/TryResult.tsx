@@ -12,6 +12,8 @@ import { EffortQuestion } from "./EffortQuestion";
 import { tryOf } from "../tryOf";
 import { useKeepTry } from "../tryQueries";
 import type { TryRecorder } from "../singing/tryRecorder";
+import { sungToHandIn } from "./sungToHandIn";
+import type { TryScreenProps } from "../tryScreenProps";
 import { TryReport } from "./TryReport";
 import type { MeasuredTry, Try } from "../useTry";
 
@@ -24,10 +26,11 @@ export interface TryResultProps {
   playback: TryRecorder["playback"];
   crumb: Crumb;
   onKept: (id: string) => void;
+  handIn: TryScreenProps["handIn"];
 }
 
 /** What was sung, how it felt, and whether to keep it. */
-export function TryResult({ song, mode, measured, own, voiceId, playback, crumb, onKept }: TryResultProps) {
+export function TryResult({ song, mode, measured, own, voiceId, playback, crumb, onKept, handIn }: TryResultProps) {
   const keep = useKeepTry();
   const key = { tonic: measured.key.tonic, mode };
   const sign = glyphs(keySign(key));
@@ -67,6 +70,7 @@ export function TryResult({ song, mode, measured, own, voiceId, playback, crumb,
         <View style={{ maxWidth: 560 }}>
           <EffortQuestion effort={own.effort} onFelt={own.felt} />
         </View>
+        {handIn?.(sungToHandIn(measured, own.effort))}
         <TryReport measured={measured} spelling={spellingIn(key)} playback={playback} />
       </View>
     </Screen>

@@ -1,0 +1,51 @@
+import { hzToMidi } from "@/shared/music/pitch";
+import type { TakeMeasures } from "@/shared/keys/takeMeasures";
+import type { MeasuredTry } from "../useTry";
+
+/** A measured take, as it can be handed in to a teacher: all but its sound. */
+export interface SungToHandIn {
+  id: string;
+  tonic: string;
+  shift: number;
+  effort: number | null;
+  measures: TakeMeasures | null;
+  /** sung pitch, thinned out to at most 4,000 points */
+  trail: { t: number; midi: number }[];
+  /** the tune where it was sung, in the singer's octave */
+  tune: { t: number; durationS: number; midi: number }[];
+}
+
+const mostPoints = 4000;
+const mostNotes = 2000;
+const round = (value: number) => Math.round(value * 100) / 100;
+
+export function sungToHandIn(measured: MeasuredTry, effort: number | null): SungToHandIn {
+  const { take, key, measures } = measured;
+  return { id: take.id, ...key, effort, measures, trail: trailOf(take.report.f0), tune: tuneOf(measured) };
+}
+
+function trailOf(f0: readonly (number | null)[]): SungToHandIn["trail"] {
+  const step = Math.max(1, Math.ceil(f0.length / mostPoints));
+  return f0.flatMap((hz, k) => (hz === null || k % step > 0 ? [] : [{ t: k / 100, midi: round(hzToMidi(hz)) }]));
+}
+
+/** To the backing its notes stand where they sounded; without one each phrase is laid where it was sung. */
+function tuneOf({ plan, startS, measures }: MeasuredTry): SungToHandIn["tune"] {
+  if (!plan || !measures) return [];
+  const octaves = 12 * measures.octaves;
+  const notes = plan.notes.flatMap(({ at, duration, midi, phrase }) => {
+    const sung = { midi: midi + octaves };
+    if (startS !== null) return [{ ...sung, t: at + startS, durationS: duration }];
+    const found = measures.phrases.find((one) => one.phrase === phrase);
+    const own = plan.notes.filter((note) => note.phrase === phrase);
+    const last = own.at(-1);
+    if (!found || found.start === null || found.end === null || !last) return [];
+    const begins = own[0]?.at ?? at;
+    const pace = (found.end - found.start) / Math.max(0.1, last.at + last.duration - begins);
+    return [{ ...sung, t: found.start + (at - begins) * pace, durationS: duration * pace }];
+  });
+  return notes
+    .filter(({ t, midi }) => t >= 0 && midi >= 0 && midi <= 127)
+    .slice(0, mostNotes)
+    .map(({ t, durationS, midi }) => ({ t: round(t), durationS: round(durationS), midi }));
+}

@@ -5,7 +5,7 @@ import type { Page } from "playwright-core";
 import { launchBrowser, viewports, type Viewport } from "./browser";
 import { makeMicrophones } from "./microphone";
 import { startProduct } from "./product";
-import { signInAsMaren } from "./signIn";
+import { signInAsMaren, signInAsRuth } from "./signIn";
 import { sungUpTo } from "./singing";
 
 const folder = join(__dirname, "..", "..", "docs", "pictures");
@@ -22,6 +22,7 @@ async function main(): Promise<void> {
   try {
     await sung(await open("phone"));
     for (const viewport of ["phone", "wide"] as const) await classSongs(await open(viewport), viewport);
+    await roster(await open("wide"));
   } finally {
     await browser.close();
     await product.stop();
@@ -64,6 +65,19 @@ async function classSongs(page: Page, viewport: Viewport): Promise<void> {
   await page.goto(`${song}/ways`);
   await page.getByTestId("ways").waitFor();
   await picture(page, `${viewport}-ways`);
+  if (viewport === "phone") return;
+  await page.goto(`${song}/sheet`);
+  await page.getByTestId("paper").getByText("The tune in your voice").first().waitFor();
+  await picture(page, "wide-sheet");
+}
+
+/** The evening class, as its teacher sees it. */
+async function roster(page: Page): Promise<void> {
+  await signInAsRuth(page, "/studio");
+  await page.getByText("Tuesday evening class").first().click();
+  await page.getByTestId("pupil").first().waitFor();
+  await page.waitForLoadState("networkidle");
+  await picture(page, "wide-roster");
 }
 
 void main();

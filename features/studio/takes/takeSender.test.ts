@@ -25,11 +25,11 @@ const arrived = { state: "ready" } as HandIn;
 let Problem = ApiError;
 
 /** As after a reload: nothing is remembered but what lies on the device. */
-async function reload(): Promise<Sender> {
+function reload(): Sender {
   jest.resetModules();
-  const { takeSender } = await import("./takeSender");
+  const { takeSender } = jest.requireActual<{ takeSender: Sender }>("./takeSender");
   // The class of the module registry that the sender uses now.
-  Problem = (await import("@/features/api/apiError")).ApiError;
+  Problem = jest.requireActual<{ ApiError: typeof ApiError }>("@/features/api/apiError").ApiError;
   return takeSender;
 }
 
@@ -43,7 +43,7 @@ beforeEach(() => {
 afterEach(() => jest.useRealTimers());
 
 it("keeps a take on the device until the server has it, and says how far it is", async () => {
-  const sender = await reload();
+  const sender = reload();
   let done: (answer: HandIn) => void = () => undefined;
   mockUpload.mockImplementation((_take, onSent) => {
     onSent(400);
@@ -59,7 +59,7 @@ it("keeps a take on the device until the server has it, and says how far it is",
 });
 
 it("waits while there is no connection, goes on by itself, and at once when the browser is online again", async () => {
-  const sender = await reload();
+  const sender = reload();
   mockUpload.mockImplementation(() => Promise.reject(new Problem(0, "offline", "Away.")));
   await sender.handIn(aTake());
   await settled();
@@ -74,11 +74,11 @@ it("waits while there is no connection, goes on by itself, and at once when the 
 });
 
 it("goes on after a reload, only with one's own", async () => {
-  const first = await reload();
+  const first = reload();
   mockUpload.mockImplementation(() => new Promise(() => undefined));
   await first.handIn(aTake());
   mockDevice.set("other", { ...aTake("other"), accountId: "ida" });
-  const after = await reload();
+  const after = reload();
   mockUpload.mockReset().mockResolvedValue(arrived);
   await after.resume("maren");
   await settled();
@@ -87,7 +87,7 @@ it("goes on after a reload, only with one's own", async () => {
 });
 
 it("says why a take is refused, keeps it, and forgets it only when it is given up", async () => {
-  const sender = await reload();
+  const sender = reload();
   mockUpload.mockImplementation(() => Promise.reject(new Problem(403, "not-agreed", "You have not agreed.")));
   await sender.handIn(aTake());
   await settled();

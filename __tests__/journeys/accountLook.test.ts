@@ -1,0 +1,109 @@
+import type { Page } from "playwright-core";
+import type { Viewport } from "./browser";
+import { screenFaults, scrollsSideways } from "./screenFaults";
+import { signInAsMaren } from "./signIn";
+import { setStage } from "./stage";
+
+const stage = setStage("kept");
+
+type Screen = [path: string, ready: (page: Page) => Promise<unknown>];
+
+/** The page about signing in with all that unfolds, and a complaint at a field. */
+async function securityUnfolded(page: Page): Promise<void> {
+  await page.getByTestId("change-password").click();
+  await page.getByTestId("send-password").click();
+  await page.locator('[data-testid="present-password"][aria-invalid="true"]').waitFor();
+  await page.getByTestId("change-email").click();
+  await page.getByTestId("new-email").waitFor();
+}
+
+/** A profile of an administrator with codes on. */
+async function asAdministrator(viewport: Viewport, colorScheme: "light" | "dark") {
+  const profile = await stage.open("none", viewport, colorScheme);
+  const email = `warden.${viewport}.${colorScheme}@orlow-quay.example`;
+  const data = { email, password: "bell over the harbour" };
+  expect((await profile.page.request.post("/api/auth/sign-up", { data })).status()).toBe(201);
+  await stage.query(`
+    WITH warden AS (UPDATE users SET role = 'admin', confirmed_at = now() WHERE email = '${email}' RETURNING id)
+    INSERT INTO second_factors (user_id, secret, confirmed_at) SELECT id, 'unused', now() FROM warden`);
+  // The page takes up the session that the cookie holds.
+  await profile.context.addInitScript(
+    "location.protocol === 'about:' || localStorage.setItem('larkspan.has-session', '1')",
+  );
+  return profile;
+}
+
+const administratorsScreens: Screen[] = [
+  ["/admin", (page) => page.getByText("maren@orlow-quay.example").first().waitFor()],
+  ["/admin/health", (page) => page.getByText("Mail, seven days").waitFor()],
+  ["/admin/audit", (page) => page.getByText("Signed up").first().waitFor()],
+  ["/account/security", (page) => page.getByTestId("codes-off").waitFor()],
+];
+
+const strangersScreens: Screen[] = [
+  ["/account/forgotten", (page) => page.getByTestId("email").waitFor()],
+  ["/account/reset#not-one-of-ours", (page) => page.getByTestId("password").waitFor()],
+  ["/account/reset", (page) => page.getByTestId("link-not-valid").waitFor()],
+  ["/account/confirm#not-one-of-ours", (page) => page.getByTestId("confirm-sign-in").waitFor()],
+  ["/account/unsubscribe#not-one-of-ours", (page) => page.getByTestId("unsubscribe").waitFor()],
+  ["/account/security", (page) => page.getByTestId("sign-in-first").waitFor()],
+];
+
+const singersScreens: Screen[] = [
+  ["/account/security", securityUnfolded],
+  ["/account/sessions", (page) => page.getByTestId("end-all").waitFor()],
+  ["/account/mail", (page) => page.getByTestId("mail-weekly").waitFor()],
+  [
+    "/account/data",
+    async (page) => {
+      await page.getByTestId("birth-year").waitFor();
+      await page.getByTestId("ask-erase").click();
+      await page.getByTestId("erase-password").waitFor();
+    },
+  ],
+  ["/admin", (page) => page.getByTestId("not-yours").waitFor()],
+];
+
+/** Goes through screens one after the other; what is wrong with each that is not as it should be. */
+async function walk(page: Page, screens: readonly Screen[], look: (page: Page) => Promise<string[]>) {
+  const findings: Record<string, string[]> = {};
+  for (const [path, ready] of screens) {
+    // A page that stands already would only be told another #.
+    await page.goto("about:blank");
+    await page.goto(path);
+    await ready(page);
+    const said = await look(page);
+    if (said.length > 0) findings[path] = said;
+  }
+  return findings;
+}
+
+// The same parts stand on both sizes, so each size is looked at in one of the themes.
+test.each([
+  ["phone", "dark"],
+  ["wide", "light"],
+] as const)(
+  "every screen of the account on the %s in %s colours is accessible, throws nothing and does not scroll sideways",
+  async (viewport, scheme) => {
+    const stranger = await stage.open("none", viewport, scheme);
+    const singer = await stage.open("none", viewport, scheme);
+    await signInAsMaren(singer.page, "/account");
+    const administrator = await asAdministrator(viewport, scheme);
+    expect(await walk(stranger.page, strangersScreens, screenFaults)).toEqual({});
+    expect(await walk(singer.page, singersScreens, screenFaults)).toEqual({});
+    expect(await walk(administrator.page, administratorsScreens, screenFaults)).toEqual({});
+    expect([...stranger.errors, ...singer.errors, ...administrator.errors]).toEqual([]);
+    for (const { context } of [stranger, singer, administrator]) await context.close();
+  },
+  180_000,
+);
+
+test("no screen of the account scrolls sideways on 320 px", async () => {
+  const { context, page } = await stage.open("none", "phone");
+  await page.setViewportSize({ width: 320, height: 640 });
+  const wider = async () => ((await scrollsSideways(page)) ? ["scrolls sideways"] : []);
+  expect(await walk(page, strangersScreens, wider)).toEqual({});
+  await signInAsMaren(page, "/account");
+  expect(await walk(page, singersScreens, wider)).toEqual({});
+  await context.close();
+}, 120_000);

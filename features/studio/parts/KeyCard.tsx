@@ -38,13 +38,13 @@ export function KeyCard({ part, now }: { part: Part; now: Date }) {
       </Text>
       {note !== "" && <Text testID="assignment-note">{note}</Text>}
       {partNote !== "" && <Text testID="part-note">{partNote}</Text>}
-      {side === "pupil" && <PupilLinks songId={songId} />}
+      {side === "pupil" && <PupilLinks part={part} />}
     </Card>
   );
 }
 
 /** Where a pupil works on the song: their own copy of it on their own shelf. */
-function PupilLinks({ songId }: { songId: string | null }) {
+function PupilLinks({ part: { songId, tonic, shift, shares } }: { part: Part }) {
   const phone = useLayout() === "phone";
   if (songId === null)
     return (
@@ -56,7 +56,13 @@ function PupilLinks({ songId }: { songId: string | null }) {
   const grow = phone ? { flexGrow: 1 } : null;
   return (
     <View style={{ flexDirection: "row", flexWrap: "wrap", gap: 10 }}>
-      <LinkButton label="Sing it" icon="mic" href={to("/try")} testID="part-try" style={grow} />
+      <LinkButton
+        label={shares ? "Sing it and hand it in" : "Sing it"}
+        icon="mic"
+        href={to(`/try?${new URLSearchParams({ key: tonic, shift: String(shift) }).toString()}`)}
+        testID="part-try"
+        style={grow}
+      />
       <LinkButton kind="secondary" label="Open the sheet" href={to("/sheet")} testID="part-sheet" style={grow} />
       <LinkButton kind="text" label="The song" href={to("")} testID="part-song" />
     </View>

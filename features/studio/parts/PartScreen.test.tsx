@@ -51,7 +51,9 @@ it("leads the pupil to their own copy of the song, in the key and the way that t
   expect(screen.getByTestId("part-key").textContent).toMatch(
     /D major.*a whole tone over the chart.*Box guitar: capo 2/,
   );
-  expect(screen.getByRole("link", { name: "Sing it" }).getAttribute("href")).toMatch(/^\/songs\/[\w-]+\/try$/);
+  expect(screen.getByRole("link", { name: "Sing it and hand it in" }).getAttribute("href")).toMatch(
+    /^\/songs\/[\w-]+\/try\?key=D&shift=2$/,
+  );
   expect((await screen.findByTestId("comment")).textContent).toMatch(/Rhona Teale.*at 0:42.*Breathe here/);
 });
 

@@ -1,17 +1,15 @@
 import { useQuery } from "@tanstack/react-query";
-import type { Href } from "expo-router";
 import { View } from "react-native";
 import { http } from "@/features/api/httpClient";
 import { AskedTwice } from "@/features/ui/AskedTwice";
 import { Card } from "@/features/ui/Card";
 import { Heading } from "@/features/ui/Heading";
-import { LinkButton } from "@/features/ui/LinkButton";
 import { QueryState } from "@/features/ui/QueryState";
 import { Text } from "@/features/ui/Text";
-import type { Part } from "@/shared/contract/studio/assignment";
 import type { HandIn } from "@/shared/contract/studio/handIn";
 import { dayOf } from "../dayWords";
 import type { TakesPlace } from "../parts/takesPlace";
+import { effortWord } from "../roster/rosterWords";
 import { studioQueries, useStudioChange } from "../studioQueries";
 import { RecordAnswer } from "./RecordAnswer";
 import { SendingRow } from "./SendingRow";
@@ -52,24 +50,10 @@ export function PartTakes({ part, comments, onTime, now }: PartTakesProps) {
           );
         }}
       </QueryState>
-      {part.side === "teacher" ? <RecordAnswer part={part} /> : <SingIt part={part} />}
+      {part.side === "teacher" && <RecordAnswer part={part} />}
     </View>
   );
 }
-
-/** The pupil sings in the key that was given, and hands the take in there. */
-function SingIt({ part: { songId, tonic, shift } }: { part: Part }) {
-  if (songId === null)
-    return <Text tone="soft">The song is not on your shelf any more, so it cannot be sung here.</Text>;
-  const params = new URLSearchParams({ key: tonic, shift: String(shift) });
-  return (
-    <View style={{ alignSelf: "flex-start" }}>
-      <LinkButton label="Sing it and hand it in" href={`/songs/${songId}/try?${params}` as Href} testID="sing-it" />
-    </View>
-  );
-}
-
-const effortWords = ["", "easy", "fairly easy", "some effort", "hard", "straining"];
 
 interface TakeCardProps extends Pick<TakesPlace, "comments" | "onTime"> {
   take: HandIn;
@@ -83,7 +67,7 @@ function TakeCard({ take, comments, onTime, now }: TakeCardProps) {
   const facts = [
     mine ? "you" : author.name,
     dayOf(createdAt, now),
-    effort === null ? null : `felt ${effortWords[effort]}`,
+    effort === null ? null : `felt ${effortWord(effort)}`,
   ];
   return (
     <Card style={{ gap: 10 }} testID={kind}>

@@ -37,7 +37,9 @@ export function TakeTrail({ take, judging, refused, onTrim }: TakeTrailProps) {
   const seconds = take.pcm.length / take.sampleRate;
   const judged = take.part ?? { startS: 0, endS: seconds };
   const [draft, setDraft] = useState<TakePart | null>(null);
-  const part = draft ?? judged;
+  // While the part is read, the handles stay where they were put.
+  const [asked, setAsked] = useState<TakePart | null>(null);
+  const part = draft ?? (judging ? asked : null) ?? judged;
   const { playing, failed, play, stop, position } = usePlayback(take.pcm, take.sampleRate);
   const read = useCallback(() => {
     const now = position();
@@ -46,6 +48,7 @@ export function TakeTrail({ take, judging, refused, onTrim }: TakeTrailProps) {
   }, [picture, position]);
   const commit = (next: TakePart) => {
     setDraft(null);
+    setAsked(next);
     const all = next.startS <= 0 && next.endS >= seconds;
     if (next.startS !== judged.startS || next.endS !== judged.endS) onTrim(all ? null : next);
   };

@@ -14,7 +14,7 @@ import { playedWords } from "./playedWords";
 
 /** The key and the way of a part, what the teacher wrote to it, and, for the pupil, the ways on. */
 export function KeyCard({ part, now }: { part: Part; now: Date }) {
-  const { tonic, mode, shift, side, shares, songId, note, partNote, dueOn, assignedAt, assignedBy } = part;
+  const { tonic, mode, shift, side, shares, note, partNote, dueOn, assignedAt, assignedBy } = part;
   const key = { tonic, mode };
   const played = playedWords(part);
   const shown = side === "pupil" || shares;
@@ -60,7 +60,7 @@ function PupilLinks({ part: { songId, tonic, shift, shares } }: { part: Part }) 
         label={shares ? "Sing it and hand it in" : "Sing it"}
         icon="mic"
         href={to(`/try?${new URLSearchParams({ key: tonic, shift: String(shift) }).toString()}`)}
-        testID="part-try"
+        testID="sing-it"
         style={grow}
       />
       <LinkButton kind="secondary" label="Open the sheet" href={to("/sheet")} testID="part-sheet" style={grow} />

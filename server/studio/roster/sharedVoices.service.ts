@@ -3,7 +3,6 @@ import type { RosterRow } from "../../../shared/contract/studio/roster";
 import { keyVoiceOf } from "../../../shared/keys/singingVoiceOf";
 import { movingEnds } from "../../../shared/voice/movingEnds";
 import { type KeptTake, shownTake } from "../../../shared/voice/shownTake";
-import { TakeEntity } from "../../voices/take.entity";
 import { VoiceEntity } from "../../voices/voice.entity";
 
 type SharedVoice = NonNullable<RosterRow["voice"]>;
@@ -23,23 +22,7 @@ export class SharedVoicesService {
       .orderBy("voice.createdAt", "DESC")
       .addOrderBy("voice.id")
       .getMany();
-    // Without the notes, which are most of a take.
-    const takes = await this.dataSource
-      .createQueryBuilder(TakeEntity, "take")
-      .select(
-        ["id", "userId", "voiceId", "kind", "shows", "sungAt", "effort", "range", "comfort", "estimate"]
-          .concat("tuningCents", "certainty")
-          .map((column) => `take.${column}`),
-      )
-      .where("take.userId IN (:...people)", { people })
-      .orderBy("take.sungAt", "DESC")
-      .addOrderBy("take.id")
-      .getMany();
-    const ofVoice = new Map<string, KeptTake[]>();
-    for (const take of takes) {
-      const known = ofVoice.get(take.voiceId) ?? [];
-      if (known.length < mostTakes) ofVoice.set(take.voiceId, [...known, take]);
-    }
+    const ofVoice = await this.takes(people);
     const found = new Map<string, { shared: SharedVoice; at: string }>();
     for (const voice of voices) {
       const own = ofVoice.get(voice.id) ?? [];
@@ -53,5 +36,22 @@ export class SharedVoicesService {
       found.set(voice.userId, { at, shared: { voiceId: voice.id, name: voice.name, ...known, measuredAt, changing } });
     }
     return new Map([...found].map(([person, { shared }]) => [person, shared]));
+  }
+
+  /** By voice, newest first; without the notes, which are most of a take. */
+  private async takes(people: string[]): Promise<Map<string, KeptTake[]>> {
+    const rows: (Omit<KeptTake, "sungAt"> & { sungAt: Date })[] = await this.dataSource.query(
+      `SELECT id, voice_id AS "voiceId", kind, shows, sung_at AS "sungAt", effort, range, comfort, estimate,
+              tuning_cents AS "tuningCents", certainty
+       FROM takes WHERE user_id = ANY($1) ORDER BY sung_at DESC, id`,
+      [people],
+    );
+    const ofVoice = new Map<string, KeptTake[]>();
+    for (const row of rows) {
+      const known = ofVoice.get(row.voiceId) ?? [];
+      if (known.length < mostTakes) known.push({ ...row, sungAt: row.sungAt.toISOString() });
+      ofVoice.set(row.voiceId, known);
+    }
+    return ofVoice;
   }
 }

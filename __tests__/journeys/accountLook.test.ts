@@ -106,5 +106,5 @@ test.each([
     expect([...stranger.errors, ...singer.errors, ...administrator.errors]).toEqual([]);
     for (const { context } of [stranger, singer, administrator]) await context.close();
   },
-  180_000,
+  300_000,
 );

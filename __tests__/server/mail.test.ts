@@ -3,6 +3,7 @@ import request from "supertest";
 import { enqueueMail, type WaitingMail } from "../../server/mail/mail.service";
 import { LinkTokensService } from "../../server/mail/linkTokens.service";
 import { MailPreferencesService } from "../../server/mail/mailPreferences.service";
+import { Postman } from "../../server/mail/postman";
 import { Person, startTestServer, type TestServer, tokenSecret } from "./testServer";
 
 let server: TestServer;
@@ -91,6 +92,43 @@ it("does not send a second time what a process that died may have sent", async (
   await put(mail);
   await server.runJobs();
   expect(server.smtp.mails).toHaveLength(0);
+});
+
+describe("a mail that may have left", () => {
+  const postman = (transport: { sendMail: () => Promise<unknown>; verify?: () => Promise<true> }) =>
+    new Postman({
+      dataSource: server.dataSource,
+      transport: { verify: () => Promise.resolve(true), ...transport } as ConstructorParameters<
+        typeof Postman
+      >[0]["transport"],
+      from: "no-reply@larkspan.test",
+      origin: "http://larkspan.test",
+      tokens: new LinkTokensService(tokenSecret),
+      preferences: new MailPreferencesService(server.dataSource, tokenSecret),
+    });
+  const stateOf = async (event: string) => {
+    const [row] = await server.database.query("SELECT state FROM sent_mails WHERE event = $1", [event]);
+    return row?.state;
+  };
+
+  it("is not sent again where the connection broke without an answer", async () => {
+    const mail = assigned();
+    const sendMail = jest.fn(() => Promise.reject(Object.assign(new Error("closed"), { command: "CONN" })));
+    await postman({ sendMail }).deliver(mail);
+    expect(await stateOf(mail.event)).toBe("uncertain");
+    await postman({ sendMail }).deliver(mail);
+    expect(sendMail).toHaveBeenCalledTimes(1);
+  });
+
+  it("is tried again where nobody was there to take it", async () => {
+    const mail = assigned();
+    const sendMail = jest.fn(() => Promise.resolve({}));
+    const away = Object.assign(new Error("refused"), { syscall: "connect" });
+    await expect(postman({ sendMail, verify: () => Promise.reject(away) }).deliver(mail)).rejects.toThrow("refused");
+    expect([sendMail.mock.calls.length, await stateOf(mail.event)]).toEqual([0, undefined]);
+    await postman({ sendMail }).deliver(mail);
+    expect(await stateOf(mail.event)).toBe("sent");
+  });
 });
 
 it("does not write to somebody whose account is gone meanwhile", async () => {

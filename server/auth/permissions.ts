@@ -53,7 +53,7 @@ const studio = {
   postInvitesAccept: oneself,
   putStudiosIdConsent: own,
   getGuardian: oneself,
-  postGuardian: oneself,
+  postGuardian: { ...oneself, confirmed: true },
   postGuardianLook: visitor,
   postGuardianConfirm: visitor,
   postGuardianWithdraw: visitor,

@@ -10,7 +10,7 @@ import type { Mail } from "./templates/mailLayout";
 
 interface PostmanSettings {
   dataSource: DataSource;
-  transport: Pick<Transporter, "sendMail">;
+  transport: Pick<Transporter, "sendMail" | "verify">;
   from: string;
   /** where the links lead */
   origin: string;
@@ -28,7 +28,7 @@ const waitingMail = z.object({
   token: z.object({ id: z.uuid(), purpose: z.string() }).optional(),
 });
 
-type SmtpError = Error & { responseCode?: number; command?: string };
+type SmtpError = Error & { responseCode?: number; syscall?: string };
 
 /** Sends waiting mails. An event's row in the ledger is taken before its mail leaves, so it never leaves twice. */
 export class Postman {
@@ -36,13 +36,17 @@ export class Postman {
 
   async deliver(payload: unknown): Promise<void> {
     const mail = waitingMail.parse(payload) as WaitingMail;
-    if (!(await this.isWanted(mail)) || !(await this.claim(mail))) return;
+    if (!(await this.isWanted(mail))) return;
+    // A mail server that is away or takes no password is told apart here, while it is certain that nothing has left.
+    await this.settings.transport.verify();
+    if (!(await this.claim(mail))) return;
     try {
       await this.settings.transport.sendMail(this.message(mail));
-      await this.note(mail.event, "sent");
     } catch (error) {
       await this.failed(mail.event, error as SmtpError);
+      return;
     }
+    await this.note(mail.event, "sent");
   }
 
   private async isWanted({ kind, userId }: WaitingMail): Promise<boolean> {
@@ -71,9 +75,11 @@ export class Postman {
 
   /** Only what certainly did not leave is tried again. */
   private async failed(event: string, error: SmtpError): Promise<void> {
-    if (error.responseCode !== undefined && error.responseCode >= 500) {
+    const { responseCode: answer, syscall } = error;
+    if (answer !== undefined && answer >= 500) {
       await this.note(event, "refused");
-    } else if (error.responseCode === undefined && error.command === "DATA") {
+    } else if (answer === undefined && syscall !== "connect") {
+      // A connection that broke may have broken after the mail was taken.
       await this.note(event, "uncertain");
     } else {
       await this.settings.dataSource.query("DELETE FROM sent_mails WHERE event = $1", [event]);

@@ -73,7 +73,7 @@ export async function runChecks({ root, say, databaseUrl, only }) {
   const sideBySide = [
     timed("engine", ["engine"], "-w", "1"),
     jest("client", ["client"], "-w", "1"),
-    jest("server", ["server"], "-w", "1"),
+    timed("server", ["server"], "-w", "1"),
     plain("types", bin("typescript", "bin", "tsc"), "--noEmit"),
     plain("types of the pure engine", bin("typescript", "bin", "tsc"), "-p", "tsconfig.shared.json"),
     plain("lint", bin("eslint", "bin", "eslint.js"), ".", "--max-warnings", "0"),

@@ -39,8 +39,8 @@ export function studioParts(dataSource: DataSource, { tokenSecret }: { tokenSecr
     assignments: new AssignmentsService(dataSource, access, copies),
     parts: new PartsService(dataSource, partAccess, copies, comments),
     limits: {
-      /** links from mails, by address */
-      link: new TryBucket(dataSource, "studio-link", 60),
+      /** links from mails, by address: a whole school may have the same, and nobody guesses 256 bits */
+      link: new TryBucket(dataSource, "studio-link", 1000),
       /** addresses written to, by teacher */
       invited: new TryBucket(dataSource, "invited", 400, dayS),
       /** mails to guardians, by pupil */

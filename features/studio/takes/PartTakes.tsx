@@ -11,6 +11,7 @@ import { dayOf } from "../dayWords";
 import type { TakesPlace } from "../parts/takesPlace";
 import { effortWord } from "../roster/rosterWords";
 import { studioQueries, useStudioChange } from "../studioQueries";
+import { measuredLine } from "./measuredLine";
 import { RecordAnswer } from "./RecordAnswer";
 import { SendingRow } from "./SendingRow";
 import { TakePlayer } from "./TakePlayer";
@@ -84,7 +85,7 @@ function TakeCard({ take, comments, onTime, now }: TakeCardProps) {
       ) : (
         <>
           <TakePlayer take={take} comments={comments} onTime={onTime} />
-          {measures && measures.summary.length > 0 && <Text variant="small">{measures.summary.join(" ")}</Text>}
+          {measures && <Text variant="small">{measuredLine(measures)}</Text>}
           <Text variant="tiny" tone="soft" testID="take-expiry">
             {`Deleted by itself on ${dayOf(expiresAt, now)}.`}
           </Text>

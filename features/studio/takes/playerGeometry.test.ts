@@ -22,6 +22,6 @@ it("breaks the line where nothing was sung, also in a long take whose points lie
 });
 
 it("draws silence as a thin line and the loudest to both edges", () => {
-  expect(wavePath([0, 1], 100, 40)).toBe("M0.0 19.3L100.0 0.0L100.0 40.0L0.0 20.8Z");
+  expect(wavePath([0, 0.4], 100, 40)).toBe("M0.0 19.3L100.0 0.0L100.0 40.0L0.0 20.8Z");
   expect(wavePath([], 100, 40)).toBe("");
 });

@@ -48,11 +48,12 @@ function median(values: number[]): number {
   return [...values].sort((a, b) => a - b)[values.length >> 1] ?? 0;
 }
 
-/** The waveform as a filled shape round the middle of a strip. */
+/** The waveform as a filled shape round the middle of a strip; the loudest reaches its edges. */
 export function wavePath(waveform: readonly number[], width: number, height: number): string {
   if (waveform.length < 2) return "";
   const x = (k: number) => ((k / (waveform.length - 1)) * width).toFixed(1);
-  const swing = (level: number) => Math.max(0.75, level * (height / 2));
+  const loudest = Math.max(0.01, ...waveform);
+  const swing = (level: number) => Math.max(0.75, (level / loudest) * (height / 2));
   const top = waveform.map((level, k) => `${x(k)} ${(height / 2 - swing(level)).toFixed(1)}`);
   const foot = waveform.map((level, k) => `${x(k)} ${(height / 2 + swing(level)).toFixed(1)}`).reverse();
   return `M${[...top, ...foot].join("L")}Z`;

@@ -108,7 +108,7 @@ function Sound({ picture: { frames }, seconds, playback }: SoundProps) {
           testID="take-play"
         />
         <Text variant="small" tone="soft" style={{ flexShrink: 1 }}>
-          {`${seconds.toFixed(1)} s. The sound stays on this device.`}
+          {`${seconds.toFixed(1)} s. The sound stays on this device unless you hand it in.`}
         </Text>
       </View>
       {playing && (

@@ -29,20 +29,33 @@ function trailOf(f0: readonly (number | null)[]): SungToHandIn["trail"] {
   return f0.flatMap((hz, k) => (hz === null || k % step > 0 ? [] : [{ t: k / 100, midi: round(hzToMidi(hz)) }]));
 }
 
-/** To the backing its notes stand where they sounded; without one each phrase is laid where it was sung. */
+/**
+ * To the backing its notes keep their rhythm and are moved, all alike, to where the phrases were sung: how late sound comes
+ * out of a device and back into it says nothing of the singer. Without a backing each phrase is laid where it was sung.
+ */
 function tuneOf({ plan, startS, measures }: MeasuredTry): SungToHandIn["tune"] {
   if (!plan || !measures) return [];
   const octaves = 12 * measures.octaves;
+  const firsts = new Map<number, number>();
+  const ends = new Map<number, number>();
+  for (const { at, duration, phrase } of plan.notes) {
+    if (!firsts.has(phrase)) firsts.set(phrase, at);
+    ends.set(phrase, at + duration);
+  }
+  const sungAt = new Map(measures.phrases.map(({ phrase, start, end }) => [phrase, { start, end }]));
+  const late = [...sungAt].flatMap(([phrase, { start }]) => {
+    const first = firsts.get(phrase);
+    return start === null || first === undefined || startS === null ? [] : [start - first - startS];
+  });
+  const delay = late.sort((a, b) => a - b)[late.length >> 1] ?? 0;
   const notes = plan.notes.flatMap(({ at, duration, midi, phrase }) => {
     const sung = { midi: midi + octaves };
-    if (startS !== null) return [{ ...sung, t: at + startS, durationS: duration }];
-    const found = measures.phrases.find((one) => one.phrase === phrase);
-    const own = plan.notes.filter((note) => note.phrase === phrase);
-    const last = own.at(-1);
-    if (!found || found.start === null || found.end === null || !last) return [];
-    const begins = own[0]?.at ?? at;
-    const pace = (found.end - found.start) / Math.max(0.1, last.at + last.duration - begins);
-    return [{ ...sung, t: found.start + (at - begins) * pace, durationS: duration * pace }];
+    if (startS !== null) return [{ ...sung, t: at + startS + delay, durationS: duration }];
+    const { start = null, end = null } = sungAt.get(phrase) ?? {};
+    const first = firsts.get(phrase) ?? at;
+    if (start === null || end === null) return [];
+    const pace = (end - start) / Math.max(0.1, (ends.get(phrase) ?? at) - first);
+    return [{ ...sung, t: start + (at - first) * pace, durationS: duration * pace }];
   });
   return notes
     .filter(({ t, midi }) => t >= 0 && midi >= 0 && midi <= 127)

@@ -1,0 +1,106 @@
+import { randomUUID } from "node:crypto";
+import type { Page } from "playwright-core";
+import { singTune, singWhenCounted, willSing } from "./countedSinger";
+import { setStage } from "./stage";
+
+const stage = setStage("kept");
+
+const tempo = 96;
+const barS = (4 * 60) / tempo;
+const song = {
+  ...{
+    title: "Back to Me",
+    chart:
+      "C           F       C\nKettle on and bread to cut,\nC            F         G\nlamps are lit along the quay,",
+    demo: null,
+    tags: [],
+  },
+  ...{
+    writtenKey: { tonic: "C", mode: "major" },
+    beatsPerBar: 4,
+    tempo,
+    archivedAt: null,
+    playedAt: null,
+    revision: 0,
+  },
+  tune: {
+    kind: "melody",
+    home: "C",
+    notes: [60, 62, 64, 65, 67, 69, 67, 67, 65, 64, 65, 64, 62, 64].map((midi, n) => ({
+      ...{ start: n + (n > 6 ? 1 : 0), duration: n % 7 === 6 ? 2 : 1, midi },
+    })),
+  },
+};
+const password = "kettle rain window";
+
+/** Signs up, and signs in at the page. */
+async function comeIn(page: Page, email: string, next: string, put?: (token: string) => Promise<void>): Promise<void> {
+  const made = await page.request.post("/api/auth/sign-up", { data: { email, password } });
+  await put?.(((await made.json()) as { accessToken: string }).accessToken);
+  await page.goto(`/account/sign-in?next=${encodeURIComponent(next)}`);
+  await page.getByTestId("email").fill(email);
+  await page.getByTestId("password").fill(password);
+  await page.getByTestId("send").click();
+  await page.waitForURL(`**${next}`);
+}
+
+test("a pupil sings what was given and hands it in over a connection that breaks; the teacher hears it, says something at a time, and nothing once consent is withdrawn", async () => {
+  const [pupil, teacher] = [await stage.open("none", "phone"), await stage.open("none", "wide")];
+  const [songId, studioId, pupilId, teacherId, assignmentId, partId] = Array.from({ length: 6 }, randomUUID);
+  await singWhenCounted(pupil.page);
+  await comeIn(teacher.page, "ruth.hand-in@example.org", "/songs");
+  await comeIn(pupil.page, "wil.hand-in@example.org", "/songs", async (token) => {
+    const data = { ...song, id: songId, createdAt: new Date().toISOString() };
+    await pupil.page.request.put(`/api/songs/${songId}`, { data, headers: { Authorization: `Bearer ${token}` } });
+  });
+  // The studio as invitation and assignment leave it; journeys of their own go that way.
+  const given = JSON.stringify({ ...song, demo: undefined, tags: undefined }).replaceAll("'", "''");
+  await stage.query(`
+    UPDATE users SET birth_year = 1980, country = 'DE', confirmed_at = now() WHERE email LIKE '%.hand-in@example.org';
+    INSERT INTO studios (id, owner_id, name) SELECT '${studioId}', id, 'Tuesday upstairs' FROM users WHERE email LIKE 'ruth.hand-in%';
+    INSERT INTO studio_members (id, studio_id, user_id, role, name, consent_given_at)
+      SELECT '${teacherId}'::uuid, '${studioId}'::uuid, id, 'owner', 'Ruth Callow', NULL FROM users WHERE email LIKE 'ruth.hand-in%'
+      UNION ALL SELECT '${pupilId}'::uuid, '${studioId}'::uuid, id, 'pupil', 'Wil Sand', now() FROM users WHERE email LIKE 'wil.hand-in%';
+    INSERT INTO assignments (id, studio_id, assigned_by, song, note) VALUES ('${assignmentId}', '${studioId}', '${teacherId}', '${given}', '');
+    INSERT INTO assignment_parts (id, studio_id, assignment_id, member_id, song_id, tonic, shift, note)
+      VALUES ('${partId}', '${studioId}', '${assignmentId}', '${pupilId}', '${songId}', 'C', 0, '')`);
+
+  const { page } = pupil;
+  await page.goto(`/studio/parts/${partId}`);
+  await page.getByTestId("sing-it").click();
+  await page.getByTestId("sing-start").waitFor();
+  await willSing(page, singTune(song.tune.notes, tempo, 80), barS);
+  await page.getByTestId("sing-start").click();
+  await page.getByTestId("hand-in-now").waitFor({ timeout: 60_000 });
+  await page.getByTestId("try-effort").getByRole("radio", { name: "2", exact: true }).click();
+
+  let cut = true;
+  await pupil.context.route("**/api/uploads/*", (route) => (cut ? route.abort("connectionreset") : route.continue()));
+  await page.getByTestId("hand-in-now").click();
+  await page.getByTestId("hand-in-sending").getByText("Waiting for the connection").waitFor({ timeout: 40_000 });
+  // Closed and opened again: the take is still there, and goes on by itself.
+  cut = false;
+  await page.goto(`/studio/parts/${partId}`);
+  await page.getByTestId("pupil-take").waitFor({ timeout: 40_000 });
+  expect(await page.getByTestId("hand-in-sending").count()).toBe(0);
+
+  const desk = teacher.page;
+  await desk.goto(`/studio/parts/${partId}`);
+  await desk.getByTestId("play-take").click();
+  await desk
+    .getByTestId("take-clock")
+    .getByText(/^0:0[2-9] of/)
+    .waitFor();
+  await desk.getByTestId("say-here").click();
+  await desk.getByTestId("comment-text").fill("Here the breath runs out.");
+  await desk.getByTestId("send-comment").click();
+  await desk.getByTestId("go-to-mark").waitFor();
+  await page.reload();
+  await page.getByTestId("comment").getByText("Here the breath runs out.").waitFor();
+
+  await stage.query(`UPDATE studio_members SET consent_withdrawn_at = now() WHERE id = '${pupilId}'`);
+  await desk.reload();
+  await desk.getByTestId("not-shared").waitFor();
+  expect(await desk.getByTestId("take-player").count()).toBe(0);
+  expect([...pupil.errors, ...teacher.errors]).toEqual([]);
+}, 180_000);

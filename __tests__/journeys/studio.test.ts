@@ -2,18 +2,15 @@ import { randomUUID } from "node:crypto";
 import type { Page } from "playwright-core";
 import { axeFaults } from "./axeFaults";
 import { tokenFor } from "./mailbox";
-import { typeCredentials } from "./signIn";
+import { signInAsRuth, typeCredentials } from "./signIn";
 import { setStage } from "./stage";
 
 const stage = setStage("kept");
-const teacher = { email: "ruth@orlow-quay.example", password: "slipway lantern" };
 const password = "kettle rain window";
 
 /** Signs the demonstration's teacher in and opens her studio; the address of it. */
 async function openStudio(page: Page): Promise<string> {
-  await page.goto("/account/sign-in?next=%2Fstudio");
-  await typeCredentials(page, teacher.email, teacher.password);
-  await page.waitForURL("**/studio");
+  await signInAsRuth(page, "/studio");
   await page
     .getByTestId(/^studio-/)
     .first()

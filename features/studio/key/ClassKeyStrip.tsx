@@ -1,16 +1,17 @@
-import type { ReactNode } from "react";
+import { useEffect, useRef, type ReactNode } from "react";
 import { View } from "react-native";
 import { KeySign } from "@/features/ui/KeySign";
 import { LiveText } from "@/features/ui/LiveText";
 import { Text } from "@/features/ui/Text";
 import { colors, fonts } from "@/features/ui/theme";
 import { useLayout } from "@/features/ui/useLayout";
-import type { Mode } from "@/shared/music/keyName";
+import { tonicPitchClass, type Mode } from "@/shared/music/keyName";
 import { keySign } from "@/shared/music/keyWords";
 import { glyphs } from "@/shared/music/pitch";
 import { fitTone, fitWords } from "../assign/fitWords";
 import type { ClassKey } from "../judge/judgePupils";
 import { fairnessSentence, octaveSentence, squeezed, type InKey } from "./classWords";
+import { xOfKey } from "./dotPlaces";
 import { KeyDots } from "./KeyDots";
 
 export interface ClassKeyStripProps {
@@ -31,6 +32,12 @@ const hardest = 3;
 /** One key for all: which, how fair, every pupil in every key, and who has it hardest. */
 export function ClassKeyStrip({ title, keys, picked, onPick, mode, pupils, children }: ClassKeyStripProps) {
   const wide = useLayout() === "wide";
+  const region = useRef<HTMLDivElement>(null);
+  useEffect(() => {
+    // Where the picture is wider than the page, the picked key is brought into sight.
+    const frame = region.current;
+    if (frame) frame.scrollLeft = xOfKey(tonicPitchClass(picked.tonic)) - frame.clientWidth / 2;
+  }, [picked.tonic]);
   const inKey = pupils.flatMap(({ memberId, name }, k): InKey[] => {
     const key = picked.pupils[k];
     return key ? [{ memberId, name, key }] : [];
@@ -70,6 +77,7 @@ export function ClassKeyStrip({ title, keys, picked, onPick, mode, pupils, child
           Every key, every pupil: one dot is one voice’s score. Crossed: some in reach. Open: beyond the range
         </Text>
         <div
+          ref={region}
           role="region"
           aria-label="Scores in every key"
           tabIndex={wide ? undefined : 0}

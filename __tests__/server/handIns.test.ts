@@ -7,7 +7,7 @@ import { createDataSource } from "../../server/database/dataSource";
 import { createLogger } from "../../server/http/requestLog";
 import { ObjectStore } from "../../server/storage/objectStore.service";
 import type { HandIn, SoundLink } from "../../shared/contract/studio/handIn";
-import { aHandIn, aWav, from, handIn, partInStudio, type PartInStudio, tus } from "./partInStudio";
+import { aHandIn, aWav, from, handIn, partInStudio, type PartInStudio, storageKeyOf, tus } from "./partInStudio";
 import { Person, startTestServer, type TestServer, tokenSecret } from "./testServer";
 
 let server: TestServer;
@@ -18,6 +18,7 @@ beforeAll(async () => {
 afterAll(() => server.close());
 beforeEach(async () => {
   server.s3.down = false;
+  server.s3.refuses = () => false;
   place = await partInStudio(server);
   server.smtp.mails.length = 0;
 });
@@ -26,14 +27,24 @@ const listed = async (person: Person): Promise<HandIn[]> =>
   (await person.get(`/api/parts/${place.partId}/hand-ins`).expect(200)).body;
 const partState = async () =>
   (await server.database.query("SELECT state, effort FROM assignment_parts WHERE id = $1", [place.partId]))[0];
-const held = async (id: string) => (await server.s3.keys()).filter((key) => key.startsWith(id));
-const recordOf = async (id: string) =>
-  (await server.database.query("SELECT why, deleted_at FROM deletion_records WHERE storage_key = $1", [id]))[0];
+const held = async (key: string) => (await server.s3.keys()).filter((each) => each.startsWith(key));
+const recordOf = async (key: string) =>
+  (await server.database.query("SELECT why, deleted_at FROM deletion_records WHERE storage_key = $1", [key]))[0];
 
 async function until(done: () => Promise<boolean>): Promise<void> {
   for (const end = Date.now() + 15_000; !(await done());) {
     if (Date.now() > end) throw new Error("It did not come about in 15 seconds.");
   }
+}
+
+/** One more server of the same product, on the same database and storage. */
+async function anotherServer() {
+  const dataSource = await createDataSource(server.database.url, () => undefined).initialize();
+  const { app } = createApp(dataSource, createLogger("silent"), {
+    ...{ tokenSecret, publicOrigin: null, trustProxy: false, staticDir: "/nonexistent" },
+    objects: new ObjectStore(server.s3.settings),
+  });
+  return { app, dataSource, ask: (asked: request.Test) => asked.set("Authorization", `Bearer ${place.pupil.token}`) };
 }
 
 describe("handing in", () => {
@@ -115,11 +126,7 @@ describe("sending", () => {
     Number((await place.pupil.head(`/api/uploads/${id}`).set(tus).expect(200)).headers["upload-offset"]);
 
   it("goes on where it was cut, also at another server, and an announcement may be repeated", async () => {
-    const dataSource = await createDataSource(server.database.url, () => undefined).initialize();
-    const other = createApp(dataSource, createLogger("silent"), {
-      ...{ tokenSecret, publicOrigin: null, trustProxy: false, staticDir: "/nonexistent" },
-      objects: new ObjectStore(server.s3.settings),
-    });
+    const other = await anotherServer();
     const wav = aWav(9000);
     const asked = await announced(wav.length);
     const at = `/api/uploads/${asked.id}`;
@@ -128,12 +135,8 @@ describe("sending", () => {
     await place.pupil.post(`/api/parts/${place.partId}/hand-ins`, asked).expect(201);
     expect(await offset(asked.id)).toBe(4000);
     await place.pupil.patch(at, wav.subarray(0, 100)).set(from(0)).expect(409);
-    await request(other.app)
-      .patch(at)
-      .set({ ...from(4000), Authorization: `Bearer ${place.pupil.token}` })
-      .send(wav.subarray(4000))
-      .expect(204);
-    await dataSource.destroy();
+    await other.ask(request(other.app).patch(at).set(from(4000)).send(wav.subarray(4000))).expect(204);
+    await other.dataSource.destroy();
     expect(await offset(asked.id)).toBe(9000);
     expect(await listed(place.teacher)).toMatchObject([{ id: asked.id, state: "ready" }]);
     const { url } = (await place.teacher.get(`/api/hand-ins/${asked.id}/sound`).expect(200)).body as SoundLink;
@@ -184,13 +187,15 @@ describe("sending", () => {
   it("looks at the bytes and deletes what is no sound, whatever it was called", async () => {
     const page = Buffer.from("<!doctype html><script>alert(1)</script>".padEnd(2000));
     const asked = await announced(page.length);
+    const key = await storageKeyOf(server, asked.id);
     const { body } = await place.pupil.patch(`/api/uploads/${asked.id}`, page).set(from(0)).buffer(true).expect(422);
     expect(body.code).toBe("not-a-recording");
     await server.runJobs();
-    expect(await held(asked.id)).toEqual([]);
-    expect(await recordOf(asked.id)).toMatchObject({ why: "refused", deleted_at: expect.any(Date) });
+    expect(await held(key)).toEqual([]);
+    expect(await recordOf(key)).toMatchObject({ why: "refused", deleted_at: expect.any(Date) });
     expect((await partState())?.state).toBe("assigned");
-    await place.pupil.patch(`/api/uploads/${asked.id}`, page).set(from(0)).expect(410);
+    expect(await listed(place.pupil)).toEqual([]);
+    await place.pupil.patch(`/api/uploads/${asked.id}`, page).set(from(0)).expect(404);
   });
 
   it("refuses more bytes than were announced, and what is not sent as bytes", async () => {
@@ -225,6 +230,44 @@ describe("sending", () => {
     expect(body.code).toBe("storage-down");
     server.s3.down = false;
     await place.pupil.patch(`/api/uploads/${asked.id}`, wav).set(from(0)).expect(204);
+  });
+
+  it("says the same of a recording that is announced again while the storage is down, also of one that has arrived", async () => {
+    const wav = aWav();
+    const asked = await announced(wav.length);
+    await place.pupil.patch(`/api/uploads/${asked.id}`, wav).set(from(0)).expect(204);
+    await server.database.query("UPDATE hand_ins SET state = 'uploading' WHERE id = $1", [asked.id]);
+    const repeated = () => place.pupil.post(`/api/parts/${place.partId}/hand-ins`, asked);
+    server.s3.down = true;
+    expect((await repeated().expect(503)).body.code).toBe("storage-down");
+    // The upload was found, and the sound itself could not be read any more.
+    server.s3.down = false;
+    server.s3.refuses = (what) => /^GET \/takes\/[0-9a-f-]+\?x-id=GetObject/.test(what);
+    expect((await repeated().expect(503)).body.code).toBe("storage-down");
+    server.s3.refuses = () => false;
+    expect((await repeated().expect(201)).body.state).toBe("ready");
+  });
+
+  it("a short fault of the storage is not taken for an upload that is not there", async () => {
+    const wav = aWav(9000);
+    const asked = await announced(wav.length);
+    await place.pupil.patch(`/api/uploads/${asked.id}`, wav.subarray(0, 4000)).set(from(0)).expect(204);
+    // Another server, which remembers nothing of it, and reads what is known of it from the storage.
+    const other = await anotherServer();
+    server.s3.refuses = (what) => /^GET .*\.info/.test(what);
+    await other.ask(request(other.app).head(`/api/uploads/${asked.id}`).set(tus)).expect(503);
+    const again = request(other.app).post(`/api/parts/${place.partId}/hand-ins`).send(asked);
+    expect((await other.ask(again).expect(503)).body.code).toBe("storage-down");
+    server.s3.refuses = () => false;
+    await other.dataSource.destroy();
+    expect(await offset(asked.id)).toBe(4000);
+  });
+
+  it("lies in the storage by a key of the server's own, not by the id that its sender made", async () => {
+    const { id } = await announced(1000);
+    const keys = (await server.s3.keys()).join();
+    expect(keys).toContain(await storageKeyOf(server, id));
+    expect(keys).not.toContain(id);
   });
 
   it("tells pages of other sites nothing that would let them send", async () => {

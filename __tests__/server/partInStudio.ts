@@ -78,6 +78,12 @@ export function aHandIn(bytes: number, changes: Partial<HandInRequest> = {}): Ha
   };
 }
 
+/** By what a recording lies in the storage. */
+export async function storageKeyOf({ database }: TestServer, handInId: string): Promise<string> {
+  const [row] = await database.query("SELECT storage_key FROM hand_ins WHERE id = $1", [handInId]);
+  return String(row?.storage_key);
+}
+
 export const tus = { "Tus-Resumable": "1.0.0" };
 
 /** The headers with which bytes are sent from an offset on. */

@@ -51,13 +51,20 @@ export async function eraseAccounts(
   log: SecurityLogService,
 ): Promise<void> {
   const due: { id: string }[] = await dataSource.query("SELECT id FROM users WHERE erase_at <= now()");
+  let failure: unknown;
   for (const { id } of due) {
-    for (const part of parts) await part.erase?.(id);
-    const [, count]: [unknown, number] = await dataSource.query(
-      "DELETE FROM users WHERE id = $1 AND erase_at <= now()",
-      [id],
-    );
-    // The log keeps that it happened, not to whom.
-    if (count > 0) await log.note("erased", { userId: null });
+    try {
+      for (const part of parts) await part.erase?.(id);
+      const [, count]: [unknown, number] = await dataSource.query(
+        "DELETE FROM users WHERE id = $1 AND erase_at <= now()",
+        [id],
+      );
+      // The log keeps that it happened, not to whom.
+      if (count > 0) await log.note("erased", { userId: null });
+    } catch (error) {
+      // Of one that cannot go now the others hear nothing; it is tried again.
+      failure = error;
+    }
   }
+  if (failure) throw failure;
 }

@@ -25,6 +25,8 @@ interface Asked {
 export class FakeS3 {
   /** As a storage in trouble: everything is refused. */
   down = false;
+  /** As one in trouble with some requests only, told by "METHOD /address". */
+  refuses: (asked: string) => boolean = () => false;
   /** Its clock, in ms; links end by it. */
   now = () => Date.now();
   /** What was asked of it: method and address, newest last. */
@@ -70,7 +72,7 @@ export class FakeS3 {
   private async answer(req: IncomingMessage, res: ServerResponse): Promise<void> {
     this.asked.push(`${req.method} ${req.url}`);
     this.asked.splice(0, this.asked.length - 500);
-    if (this.down) return refuse(res, 503, "SlowDown", "Not now");
+    if (this.down || this.refuses(`${req.method} ${req.url}`)) return refuse(res, 503, "SlowDown", "Not now");
     const url = new URL(req.url ?? "/", "http://localhost");
     const fault = signatureFault(req, this.credentials, this.now());
     if (fault) return refuse(res, 403, fault, "The signature is missing, wrong or too old.");

@@ -13,6 +13,7 @@ import { HttpProblem, notFound } from "../../http/httpProblem";
 import { enqueueMail } from "../../mail/mail.service";
 import { songsOf } from "../../songs/songs.service";
 import { memberShares } from "../consent/digitalConsent";
+import { wakeDeletion } from "../handIns/takeDeletion";
 import type { StudioAccessService } from "../studioAccess.service";
 import { AssignmentEntity } from "./assignment.entity";
 import { AssignmentPartEntity } from "./assignmentPart.entity";
@@ -152,8 +153,11 @@ export class AssignmentsService {
   /** With its parts, threads and takes; the pupils keep their copies. */
   async remove(userId: string, studioId: string, id: string): Promise<void> {
     await this.access.teacher(userId, studioId);
-    const { affected } = await this.dataSource.manager.delete(AssignmentEntity, { id, studioId });
-    if (!affected) throw notFound("assignment");
+    await this.dataSource.transaction(async (manager) => {
+      const { affected } = await manager.delete(AssignmentEntity, { id, studioId });
+      if (!affected) throw notFound("assignment");
+      await wakeDeletion(manager);
+    });
   }
 }
 

@@ -73,14 +73,6 @@ export class PartsService {
     return this.get(userId, partId);
   }
 
-  /** A take has been handed in: for whoever keeps it, in the same transaction. */
-  async noteTake(manager: EntityManager, partId: string, { effort }: { effort: number | null }): Promise<void> {
-    await manager.query(
-      "UPDATE assignment_parts SET state = 'handed-in', handed_in_at = now(), effort = $2 WHERE id = $1",
-      [partId, effort],
-    );
-  }
-
   private async rekey(manager: EntityManager, access: PartAccess, wanted: PartChange): Promise<void> {
     const { partId, pupil, me } = access;
     const kept = await manager.findOneOrFail(AssignmentPartEntity, {

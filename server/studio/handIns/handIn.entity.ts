@@ -44,6 +44,10 @@ export class HandInEntity {
   @Column({ type: "timestamptz", name: "created_at", default: () => "now()" })
   createdAt!: Date;
 
+  /** when its last byte was there */
+  @Column({ type: "timestamptz", name: "ready_at", nullable: true })
+  readyAt!: Date | null;
+
   @Column({ type: "timestamptz", name: "expires_at" })
   expiresAt!: Date;
 }

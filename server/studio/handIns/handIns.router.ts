@@ -123,8 +123,7 @@ export function handInsRoutes(api: Api, dataSource: DataSource, objects: ObjectS
       answers: { 200: { description: "Upload-Offset and Upload-Length." }, ...uploadAnswers },
     },
     async (req, res) => {
-      await handIns.mayUpload(currentUserId(res), idOf(req.params));
-      await handIns.uploads.answer(req, res);
+      await handIns.uploads.answer(req, res, await handIns.uploadKey(currentUserId(res), idOf(req.params)));
     },
   );
   api.route(
@@ -142,11 +141,11 @@ export function handInsRoutes(api: Api, dataSource: DataSource, objects: ObjectS
       },
     },
     async (req, res) => {
-      await handIns.mayUpload(currentUserId(res), idOf(req.params));
+      const key = await handIns.uploadKey(currentUserId(res), idOf(req.params));
       // A form of another site cannot send this type.
       if (!req.is("application/offset+octet-stream"))
         throw new HttpProblem(415, "unsupported-media-type", "Send application/offset+octet-stream.");
-      await handIns.uploads.answer(req, res);
+      await handIns.uploads.answer(req, res, key);
     },
   );
 }

@@ -1,3 +1,4 @@
+import { randomUUID } from "node:crypto";
 import type { DataSource, EntityManager } from "typeorm";
 import type { HandIn, HandInRequest, SoundLink } from "../../../shared/contract/studio/handIn";
 import { mostTakeBytes } from "../../../shared/contract/studio/takeLimits";
@@ -10,7 +11,7 @@ import { tellPupil, tellTeachers } from "./handInMails";
 import { soundType, tellingBytes } from "./soundType";
 import { markDeleted, TakeDeletion, wakeDeletion } from "./takeDeletion";
 import { UploadLocks } from "./uploadLocks";
-import { storageDown, Uploads } from "./uploads";
+import { orStorageDown, Uploads } from "./uploads";
 
 /** So many recordings one thread holds at a time. */
 const mostInThread = 100;
@@ -86,41 +87,36 @@ export class HandInsService {
     refuseOthers(row, access);
     await this.dataSource.transaction(async (manager) => {
       await markDeleted(manager, "taken back", "h.id = $1", [id]);
-      await manager.query(
-        `UPDATE assignment_parts p SET state = 'assigned', handed_in_at = NULL, effort = NULL
-         WHERE p.id = $1 AND p.state = 'handed-in' AND NOT EXISTS (
-           SELECT FROM hand_ins h WHERE h.part_id = p.id AND h.kind = 'pupil-take' AND h.state = 'ready')`,
-        [access.partId],
-      );
       await wakeDeletion(manager);
     });
   }
 
-  /** Lets only its author send an announced recording, and only while the pupil agrees. */
-  async mayUpload(userId: string, id: string): Promise<void> {
+  /** Lets only its author send an announced recording, and only while the pupil agrees; tells where it lies. */
+  async uploadKey(userId: string, id: string): Promise<string> {
     const { row, access } = await this.reach(userId, id);
     refuseOthers(row, access);
     refuseUnshared(access);
     if (row.state === "deleted") throw new HttpProblem(410, "recording-deleted", "This recording was deleted.");
+    return row.storageKey;
   }
 
   /** Begins the upload, or ends one whose last answer was lost. */
   private async begin(id: string, bytes: number): Promise<void> {
-    const complete = await this.locks.while(id, async () => {
-      const row = await this.rows(this.dataSource.manager).where("h.id = :id", { id }).getOne();
-      if (row?.state !== "uploading") return false;
-      return this.uploads.begin(row.storageKey, bytes).catch((error: unknown) => {
-        throw error instanceof HttpProblem ? error : storageDown();
-      });
+    const find = () => this.rows(this.dataSource.manager).where("h.id = :id", { id }).getOne();
+    const key = (await find())?.storageKey;
+    if (key === undefined) return;
+    const complete = await this.locks.while(key, async () => {
+      if ((await find())?.state !== "uploading") return false;
+      return orStorageDown(this.uploads.begin(key, bytes));
     });
-    if (complete) await this.finish(id);
+    if (complete) await this.finish(key);
   }
 
   /** All bytes are there: looks at them, puts the recording into the thread and tells the other side. */
   private async finish(key: string): Promise<void> {
-    const beginning = await this.objects.read(key, tellingBytes);
+    const beginning = await orStorageDown(this.objects.read(key, tellingBytes));
     const mediaType = beginning && (await soundType(beginning));
-    const size = await this.objects.size(key);
+    const size = await orStorageDown(this.objects.size(key));
     if (!mediaType || size === null || size > mostTakeBytes) {
       await markDeleted(this.dataSource, "refused", "h.storage_key = $1", [key]);
       await wakeDeletion(this.dataSource);
@@ -132,7 +128,7 @@ export class HandInsService {
     }
     await this.dataSource.transaction(async (manager) => {
       const [rows]: [{ id: string; partId: string; kind: string; userId: string }[], number] = await manager.query(
-        `UPDATE hand_ins h SET state = 'ready', media_type = $2, bytes = $3 FROM studio_members m
+        `UPDATE hand_ins h SET state = 'ready', ready_at = now(), media_type = $2, bytes = $3 FROM studio_members m
          WHERE h.storage_key = $1 AND h.state = 'uploading' AND m.id = h.author_id
          RETURNING h.id, h.part_id AS "partId", h.kind, m.user_id AS "userId"`,
         [key, mediaType, size],
@@ -162,7 +158,7 @@ export class HandInsService {
       .createQueryBuilder()
       .insert()
       .into(HandInEntity)
-      .values({ ...request, partId, authorId: me.memberId, storageKey: request.id, state: "uploading", expiresAt })
+      .values({ ...request, partId, authorId: me.memberId, storageKey: randomUUID(), state: "uploading", expiresAt })
       .updateEntity(false)
       .execute();
   }

@@ -11,6 +11,12 @@ interface Kept {
   state: string;
 }
 
+const notRead = (ids: string[]) => `The storage did not answer, so the sound of these recordings is missing here.
+They are still kept. Ask for your data again in a while.
+
+${ids.join("\n")}
+`;
+
 /** What a person handed in or answered with: in the export with its sound, and gone from the storage with the account. */
 export class HandedInTakes implements PersonalDataPart {
   readonly name = "handed-in";
@@ -31,10 +37,15 @@ export class HandedInTakes implements PersonalDataPart {
     const files: Record<string, unknown> = {
       "hand-ins.json": rows.map(({ storageKey: _key, ...row }) => row),
     };
+    const unread: string[] = [];
     for (const { id, storageKey, mediaType, state } of rows) {
-      const sound = state === "ready" ? await this.objects.read(storageKey) : null;
+      if (state !== "ready") continue;
+      // After one that could not be read, the others are not waited for.
+      const sound = unread.length > 0 ? null : await this.objects.read(storageKey).catch(() => null);
       if (sound) files[`takes/${id}.${soundEnding(mediaType)}`] = sound;
+      else unread.push(id);
     }
+    if (unread.length > 0) files["not-read.txt"] = notRead(unread);
     return files;
   };
 

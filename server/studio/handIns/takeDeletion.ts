@@ -22,21 +22,53 @@ export async function wakeDeletion(manager: EntityManager | DataSource): Promise
   await enqueue(manager, deleteTakesTask, {}, { key: deleteTakesTask, maxAttempts: attempts });
 }
 
-/** Takes recordings out of their threads and notes what is to be deleted. `condition` speaks of hand_ins as h. */
+/**
+ * Takes recordings out of their threads and notes what is to be deleted; the parts go back to the take before. What had
+ * not arrived leaves no row, so that its sender can begin anew. `condition` speaks of hand_ins as h.
+ * @returns the keys of what is to go from the storage
+ */
 export async function markDeleted(
-  manager: EntityManager | DataSource,
+  source: EntityManager | DataSource,
   why: WhyDeleted,
   condition: string,
   values: unknown[] = [],
-): Promise<void> {
+): Promise<string[]> {
+  return source.transaction(async (manager) => {
+    const gone: { key: string; partId: string }[] = await manager.query(
+      `WITH never AS (
+         DELETE FROM hand_ins h WHERE h.state = 'uploading' AND (${condition}) RETURNING h.storage_key, h.part_id
+       ), heard AS (
+         UPDATE hand_ins h SET state = 'deleted', picture = NULL, measures = NULL, effort = NULL
+         WHERE h.state = 'ready' AND (${condition}) RETURNING h.storage_key, h.part_id
+       ), gone AS (
+         SELECT * FROM never UNION ALL SELECT * FROM heard
+       ), noted AS (
+         INSERT INTO deletion_records (storage_key, why) SELECT storage_key, $${values.length + 1} FROM gone
+         ON CONFLICT (storage_key) DO UPDATE SET deleted_at = NULL, why = excluded.why, asked_at = now()
+       )
+       SELECT storage_key AS key, part_id AS "partId" FROM gone`,
+      [...values, why],
+    );
+    await backToTakeBefore(manager, [...new Set(gone.map(({ partId }) => partId))]);
+    return gone.map(({ key }) => key);
+  });
+}
+
+/** Parts tell of the newest take that is still there. What a teacher has answered stays answered. */
+async function backToTakeBefore(manager: EntityManager, partIds: string[]): Promise<void> {
+  if (partIds.length === 0) return;
+  // Locked first: the next statement then sees a take that arrives at this moment.
+  await manager.query("SELECT FROM assignment_parts WHERE id = ANY($1) ORDER BY id FOR NO KEY UPDATE", [partIds]);
   await manager.query(
-    `WITH gone AS (
-       UPDATE hand_ins h SET state = 'deleted', picture = NULL, measures = NULL, effort = NULL
-       WHERE h.state <> 'deleted' AND (${condition}) RETURNING h.storage_key
-     )
-     INSERT INTO deletion_records (storage_key, why) SELECT storage_key, $${values.length + 1} FROM gone
-     ON CONFLICT DO NOTHING`,
-    [...values, why],
+    `UPDATE assignment_parts p SET
+       state = CASE WHEN p.state = 'handed-in' AND newest.id IS NULL THEN 'assigned' ELSE p.state END,
+       handed_in_at = coalesce(newest.ready_at, newest.created_at), effort = newest.effort
+     FROM unnest($1::uuid[]) touched (id) LEFT JOIN LATERAL (
+       SELECT h.* FROM hand_ins h WHERE h.part_id = touched.id AND h.kind = 'pupil-take' AND h.state = 'ready'
+       ORDER BY coalesce(h.ready_at, h.created_at) DESC, h.id LIMIT 1
+     ) newest ON true
+     WHERE p.id = touched.id`,
+    [partIds],
   );
 }
 
@@ -44,6 +76,11 @@ export async function markDeleted(
 const unshared = `h.part_id IN (
   SELECT p.id FROM assignment_parts p JOIN studio_members m ON m.id = p.member_id JOIN users u ON u.id = m.user_id
   WHERE NOT ${memberShares})`;
+
+/** What an account recorded, and what lies in threads that go with it. */
+const theirs = `h.author_id IN (SELECT id FROM studio_members WHERE user_id = $1)
+  OR h.part_id IN (SELECT p.id FROM assignment_parts p JOIN studio_members m ON m.id = p.member_id WHERE m.user_id = $1)
+  OR h.part_id IN (SELECT p.id FROM assignment_parts p JOIN studios s ON s.id = p.studio_id WHERE s.owner_id = $1)`;
 
 export class TakeDeletion {
   constructor(
@@ -66,27 +103,29 @@ export class TakeDeletion {
 
   /** Everything that somebody recorded, and everything in threads that go with their account. */
   async erase(userId: string): Promise<void> {
-    await markDeleted(
-      this.dataSource,
-      "account erased",
-      `h.author_id IN (SELECT id FROM studio_members WHERE user_id = $1)
-       OR h.part_id IN (SELECT p.id FROM assignment_parts p JOIN studio_members m ON m.id = p.member_id WHERE m.user_id = $1)
-       OR h.part_id IN (SELECT p.id FROM assignment_parts p JOIN studios s ON s.id = p.studio_id WHERE s.owner_id = $1)`,
+    const keys = await markDeleted(this.dataSource, "account erased", theirs, [userId]);
+    const earlier: { key: string }[] = await this.dataSource.query(
+      `SELECT r.storage_key AS key FROM deletion_records r JOIN hand_ins h ON h.storage_key = r.storage_key
+       WHERE r.deleted_at IS NULL AND (${theirs})`,
       [userId],
     );
-    await this.deleteMarked();
+    await this.deleteKeys(new Set([...keys, ...earlier.map(({ key }) => key)]));
   }
 
   /** Deletes from the storage what is marked, and records when it was gone. What cannot be deleted now is tried again. */
   async deleteMarked(): Promise<void> {
-    const open: { id: string; key: string }[] = await this.dataSource.query(
-      "SELECT id::text, storage_key AS key FROM deletion_records WHERE deleted_at IS NULL ORDER BY asked_at",
+    const open: { key: string }[] = await this.dataSource.query(
+      "SELECT storage_key AS key FROM deletion_records WHERE deleted_at IS NULL ORDER BY asked_at",
     );
+    await this.deleteKeys(open.map(({ key }) => key));
+  }
+
+  private async deleteKeys(keys: Iterable<string>): Promise<void> {
     let failure: unknown;
-    for (const { id, key } of open) {
+    for (const key of keys) {
       try {
         await this.locks.while(key, () => this.objects.remove(key));
-        await this.dataSource.query("UPDATE deletion_records SET deleted_at = now() WHERE id = $1", [id]);
+        await this.dataSource.query("UPDATE deletion_records SET deleted_at = now() WHERE storage_key = $1", [key]);
       } catch (error) {
         failure = error;
       }

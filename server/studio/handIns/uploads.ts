@@ -29,17 +29,24 @@ export class Uploads {
     const { Upload } = await import("@tus/server");
     const { datastore } = await this.server();
     const begun = await datastore.getUpload(key).catch((error: unknown) => {
-      if (isTusError(error) && error.status_code === 404) return null;
-      throw error;
+      if (!isTusError(error) || error.status_code !== 404) throw error;
+      return null;
     });
     if (begun) return begun.offset === begun.size;
+    if (await this.hasBegun(key)) throw storageDown();
     await datastore.create(new Upload({ id: key, size, offset: 0 }));
     return false;
   }
 
-  /** Answers HEAD and PATCH of one upload; whether the asker may is checked before. */
-  async answer(req: Request, res: Response): Promise<void> {
+  /** Answers HEAD and PATCH of the upload by this key; whether the asker may is checked before. */
+  async answer(req: Request, res: Response, key: string): Promise<void> {
+    req.url = `/${key}`;
     await (await this.server()).handle(req, res);
+  }
+
+  /** The store takes every fault of the storage for an upload that is not there: this asks the storage itself. */
+  private async hasBegun(key: string): Promise<boolean> {
+    return (await this.settings.objects.size(`${key}.info`)) !== null;
   }
 
   private server(): Promise<Server> {
@@ -70,13 +77,14 @@ export class Uploads {
       lockDrainTimeout: drainMs,
       // Pages of other origins have no business here: none is named.
       allowedOrigins: [],
-      getFileIdFromRequest: (_req, lastPath) => lastPath?.toLowerCase(),
+      getFileIdFromRequest: (_req, key) => key,
       onUploadFinish: async (_req, { id }) => {
         await onComplete(id);
         return {};
       },
-      onResponseError: async (_req, error) => {
-        const problem = await problemOf(error, objects);
+      onResponseError: async (req, error) => {
+        const key = req.url.slice(req.url.lastIndexOf("/") + 1);
+        const problem = await problemOf(error, () => this.hasBegun(key));
         return { status_code: problem.status, body: JSON.stringify(problem.toBody()) };
       },
     });
@@ -88,15 +96,21 @@ function isTusError(error: unknown): error is { status_code: number; body: strin
 }
 
 /** Everything that goes wrong with an upload, as the rest of the API tells it. */
-async function problemOf(error: unknown, objects: ObjectStore): Promise<HttpProblem> {
+async function problemOf(error: unknown, hasBegun: () => Promise<boolean>): Promise<HttpProblem> {
   if (error instanceof HttpProblem) return error;
   if (!isTusError(error)) return storageDown();
-  // The store takes every fault of the storage for an upload that is not there.
-  if (error.status_code === 404 && !(await objects.isUp().catch(() => false))) return storageDown();
+  if (error.status_code === 404 && (await hasBegun().catch(() => true))) return storageDown();
   return new HttpProblem(error.status_code, "upload-refused", error.body.trim());
 }
 
-export const storageDown = () =>
+/** What asks the storage, where a fault of it is told as such. */
+export async function orStorageDown<Result>(asked: Promise<Result>): Promise<Result> {
+  return asked.catch((error: unknown) => {
+    throw error instanceof HttpProblem ? error : storageDown();
+  });
+}
+
+const storageDown = () =>
   new HttpProblem(
     503,
     "storage-down",

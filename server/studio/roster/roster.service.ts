@@ -152,7 +152,7 @@ export class RosterService {
                 h.measures#>>'{fellShort,side}' = 'above' AS strained,
                 row_number() OVER (PARTITION BY p.member_id ORDER BY h.created_at DESC, h.id) AS place
          FROM hand_ins h JOIN assignment_parts p ON p.id = h.part_id
-         WHERE p.studio_id = $1 AND h.kind = 'pupil-take' AND h.state <> 'uploading') newest
+         WHERE p.studio_id = $1 AND h.kind = 'pupil-take' AND h.state = 'ready') newest
        WHERE place <= 2 ORDER BY "memberId", place`,
       [studioId],
     );

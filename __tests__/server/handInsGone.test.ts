@@ -134,7 +134,8 @@ describe("going", () => {
     const [row] = await server.database.query("SELECT handed_in_at FROM assignment_parts WHERE id = $1", [partId]);
     expect(row?.handed_in_at).toBeNull();
     const { body: roster } = await place.teacher.get(`/api/studios/${place.studioId}/roster`).expect(200);
-    expect(roster.map((each: { lastTake: unknown }) => each.lastTake)).toEqual([null]);
+    const told = roster.find(({ memberId }: { memberId: string }) => memberId === place.pupilMemberId);
+    expect(told).toMatchObject({ lastTake: null, waiting: 0 });
   });
 
   it("leaves an answer of the teacher as it is when its take goes, without how it felt", async () => {

@@ -212,19 +212,29 @@ describe("a group", () => {
     expect(await roster()).toHaveLength(3);
   });
 
-  it("keeps one key a song, newest first, with each pupil's way; hidden where the pupil no longer agrees", async () => {
-    const { person, memberId } = await pupilIn(server, studioId);
+  it("keeps one key a song, newest first, with each pupil's way; without pupils who no longer agree or are gone, and then without a reason", async () => {
+    const [{ person, memberId }, other] = [await pupilIn(server, studioId), await pupilIn(server, studioId)];
     const path = `/api/studios/${studioId}/groups`;
     const { body } = await teacher.post(path, { name: "Altos", memberIds: [memberId] }).expect(201);
-    const [first, second] = [key([memberId]), key([memberId], randomUUID(), "G")];
+    const [first, second] = [key([memberId]), key([memberId, other.memberId], randomUUID(), "G")];
     for (const each of [first, second, { ...first, tonic: "F" }])
       await teacher.put(`${path}/${body.id}/key`, each).expect(200);
     const [group] = await groups();
     expect(group?.keys.map(({ tonic }) => tonic)).toEqual(["F", "G"]);
     expect(group?.keys[1]).toEqual(second);
     await person.put(`/api/studios/${studioId}/consent`, { agree: false }).expect(200);
-    expect((await groups())[0]?.keys[1]?.pupils[0]).toMatchObject({ score: null, way: null, instrument: null });
+    const alone = { tonic: "G", reason: "", pupils: [second.pupils[1]] };
+    expect((await groups())[0]?.keys).toMatchObject([{ tonic: "F", reason: "", pupils: [] }, alone]);
+    await person.put(`/api/studios/${studioId}/consent`, { agree: true }).expect(200);
+    expect((await groups())[0]?.keys[1]).toEqual(second);
+    const stored = async () =>
+      (await server.database.query("SELECT keys FROM studio_groups WHERE id = $1", [body.id]))[0]!["keys"];
+    await person.delete(`/api/studios/${studioId}/members/${memberId}`).expect(204);
+    expect(await stored()).toMatchObject([{ tonic: "F", reason: "", pupils: [] }, alone]);
+    await server.database.query("DELETE FROM users WHERE id = $1", [other.person.id]);
+    expect(await stored()).toMatchObject([{ pupils: [] }, { tonic: "G", pupils: [] }]);
     await teacher.put(`${path}/${body.id}/key`, key([randomUUID()])).expect(422);
-    await person.put(`${path}/${body.id}/key`, first).expect(403);
+    const { person: third } = await pupilIn(server, studioId);
+    await third.put(`${path}/${body.id}/key`, first).expect(403);
   });
 });

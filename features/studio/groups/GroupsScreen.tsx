@@ -84,7 +84,7 @@ function GroupCard({ studioId, group, pupils }: GroupCardProps) {
           </Text>
           {group.keys.map((key) => (
             <Text key={key.songId} variant="small" tone="soft">
-              {`One key for all in ${key.title}: ${glyphs(key.tonic)}. ${key.reason}`}
+              {`One key for all in ${key.title}: ${glyphs(key.tonic)}. ${key.reason}`.trim()}
             </Text>
           ))}
           <View style={{ flexDirection: "row", flexWrap: "wrap", alignItems: "center", columnGap: 4, marginLeft: -8 }}>

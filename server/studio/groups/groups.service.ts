@@ -61,14 +61,16 @@ export class GroupsService {
   }
 
   /** The key of the group for a song, in place of the one before. */
-  async setKey(userId: string, studioId: string, id: string, key: GroupKey): Promise<StudioGroup> {
+  async setKey(userId: string, studioId: string, id: string, wanted: GroupKey): Promise<StudioGroup> {
     await this.access.teacher(userId, studioId);
+    const pupils = wanted.pupils.map((pupil) => ({ ...pupil, memberId: pupil.memberId.toLowerCase() }));
+    const key = { ...wanted, pupils };
     const members = await this.dataSource.query(
       "SELECT id FROM studio_members WHERE studio_id = $1 AND left_at IS NULL AND id = ANY($2)",
       [studioId, key.pupils.map(({ memberId }) => memberId)],
     );
     const known = new Set((members as { id: string }[]).map((each) => each.id));
-    if (key.pupils.some(({ memberId }) => !known.has(memberId.toLowerCase()))) throw notMembers("pupils");
+    if (key.pupils.some(({ memberId }) => !known.has(memberId))) throw notMembers("pupils");
     await this.dataSource.transaction(async (manager) => {
       const group = await manager.findOne(StudioGroupEntity, {
         where: { id, studioId },
@@ -101,15 +103,14 @@ export class GroupsService {
   }
 }
 
-/** Of pupils who do not agree at present nothing is told that comes from their voice or instrument. */
+/**
+ * Pupils who do not agree at present are not in it. The reason speaks of those who have it hardest, so that it is told
+ * only while all of them agree.
+ */
 function shown(key: GroupKey, sharing: readonly string[]): GroupKey {
   const shares = new Set(sharing);
-  return {
-    ...key,
-    pupils: key.pupils.map((pupil) =>
-      shares.has(pupil.memberId) ? pupil : { ...pupil, score: null, instrument: null, way: null },
-    ),
-  };
+  const pupils = key.pupils.filter(({ memberId }) => shares.has(memberId));
+  return { ...key, pupils, reason: pupils.length === key.pupils.length ? key.reason : "" };
 }
 
 async function fill(manager: EntityManager, studioId: string, groupId: string, memberIds: string[]): Promise<void> {

@@ -10,7 +10,7 @@ export const groupKey = z.strictObject({
   songId: z.uuid(),
   title: z.string().trim().min(1).max(200),
   tonic: tonicName,
-  /** who has it hardest and by how much */
+  /** who has it hardest and by how much; empty as soon as one of them no longer agrees */
   reason: z.string().max(500),
   pupils: z
     .array(
@@ -33,7 +33,7 @@ export const studioGroup = z.strictObject({
   id: z.uuid(),
   name: z.string(),
   memberIds: z.array(z.uuid()),
-  /** one for each song that was decided, newest first; of pupils who no longer agree, way and instrument are null */
+  /** one for each song that was decided, newest first; without pupils who no longer agree */
   keys: z.array(groupKey),
 });
 export type StudioGroup = z.infer<typeof studioGroup>;

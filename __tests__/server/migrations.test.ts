@@ -24,6 +24,8 @@ const names = [
   "LineUps1785000000000",
   "Studios1796100000000",
   "HandIns1796200000000",
+  "MembersGone1796300000000",
+  "ConsentKept1796310000000",
   "TakesGone1796400000000",
 ];
 const applied = () => database.query("SELECT name FROM migrations ORDER BY id");

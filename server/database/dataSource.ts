@@ -23,8 +23,10 @@ import { VoiceEntity } from "../voices/voice.entity";
 import { PlayerWishesEntity } from "../ways/playerWishes.entity";
 import { Arrangements1784000000000 } from "./migrations/Arrangements1784000000000";
 import { Accounts1782100000000 } from "./migrations/Accounts1782100000000";
+import { ConsentKept1796310000000 } from "./migrations/ConsentKept1796310000000";
 import { FirstTables1764547200000 } from "./migrations/FirstTables1764547200000";
 import { HandIns1796200000000 } from "./migrations/HandIns1796200000000";
+import { MembersGone1796300000000 } from "./migrations/MembersGone1796300000000";
 import { TakesGone1796400000000 } from "./migrations/TakesGone1796400000000";
 import { InstrumentPhotos1778000000000 } from "./migrations/InstrumentPhotos1778000000000";
 import { KeysPerVoice1775001600000 } from "./migrations/KeysPerVoice1775001600000";
@@ -112,6 +114,8 @@ export function createMigrationSource(url: string): DataSource {
       LineUps1785000000000,
       Studios1796100000000,
       HandIns1796200000000,
+      MembersGone1796300000000,
+      ConsentKept1796310000000,
       TakesGone1796400000000,
     ],
     migrationsTransactionMode: "all",

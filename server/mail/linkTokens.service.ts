@@ -11,6 +11,8 @@ export interface LinkTokenWish {
   userId?: string;
   /** any other row it acts on, an invitation for instance */
   subject?: string;
+  /** links that went to other addresses stay good */
+  onlyOfAddress?: boolean;
 }
 
 export interface SpentToken {
@@ -37,11 +39,11 @@ export class LinkTokensService {
 
   /** Makes a token. Earlier ones for the same purpose and the same account or row are worth nothing from now on. */
   async issue(connection: Connection, wish: LinkTokenWish): Promise<LinkToken> {
-    const { purpose, email, lifeS, userId = null, subject = null } = wish;
+    const { purpose, email, lifeS, userId = null, subject = null, onlyOfAddress = false } = wish;
     await connection.query(
       `DELETE FROM link_tokens WHERE purpose = $1 AND user_id IS NOT DISTINCT FROM $2 AND subject IS NOT DISTINCT FROM $3
-         AND NOT ($2::uuid IS NULL AND $3::uuid IS NULL)`,
-      [purpose, userId, subject],
+         AND NOT ($2::uuid IS NULL AND $3::uuid IS NULL) AND ($4::text IS NULL OR lower(email) = lower($4))`,
+      [purpose, userId, subject, onlyOfAddress ? email : null],
     );
     const id = randomUUID();
     await connection.query(

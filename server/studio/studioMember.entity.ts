@@ -34,4 +34,12 @@ export class StudioMemberEntity {
   /** a guardian's word for this studio */
   @Column({ type: "timestamptz", name: "guardian_agreed_at", nullable: true })
   guardianAgreedAt!: Date | null;
+
+  /** a guardian's no; no other guardian can be asked about this membership */
+  @Column({ type: "timestamptz", name: "guardian_refused_at", nullable: true })
+  guardianRefusedAt!: Date | null;
+
+  /** as it was when the pupil agreed; the lower of this and the studio's holds */
+  @Column({ type: "smallint", name: "recordings_kept_days", nullable: true })
+  recordingsKeptDays!: number | null;
 }

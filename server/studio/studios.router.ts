@@ -3,7 +3,7 @@ import type { Api } from "../http/api";
 import { currentUserId } from "../http/currentUser";
 import { idIn } from "../http/ownedCollection.router";
 import { parse } from "../http/parse";
-import { missingStudio, ownerOnly, studioIdIn, teachersOnly } from "./studioAnswers";
+import { missingStudio, ownerOnly, studioIdIn } from "./studioAnswers";
 import type { StudioParts } from "./studioParts";
 
 const studioSchema = { name: "Studio", schema: studio };
@@ -59,9 +59,13 @@ export function studiosRoutes(api: Api, { studios, members }: StudioParts): void
       ...common,
       method: "put",
       path: "/studios/:id",
-      summary: "Change name, event, and how long recordings are kept; for its teachers",
+      summary: "Change name and event, for its teachers; and for its owner how long recordings are kept",
       body: { name: "StudioChange", schema: studioChange },
-      answers: { 200: { description: "Saved.", schema: studioSchema }, 403: teachersOnly, 404: missingStudio },
+      answers: {
+        200: { description: "Saved.", schema: studioSchema },
+        403: { description: "Not a teacher (teachers-only), or other days and not the owner (owner-only)." },
+        404: missingStudio,
+      },
     },
     async (req, res) => {
       const wanted = parse(studioChange, req.body);

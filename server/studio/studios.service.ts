@@ -16,6 +16,7 @@ interface Row extends ConsentRow {
   name: string;
   event: Studio["event"];
   recordingsKeptDays: number;
+  agreedDays: number | null;
   createdAt: Date;
   memberId: string;
   memberName: string;
@@ -37,6 +38,7 @@ export class StudiosService {
     const rows: Row[] = await this.dataSource.query(
       `SELECT s.id, s.name, s.event, s.recordings_kept_days AS "recordingsKeptDays", s.created_at AS "createdAt",
               m.id AS "memberId", m.name AS "memberName", m.role, ${consentColumns},
+              m.recordings_kept_days AS "agreedDays",
               (SELECT json_agg(json_build_object('memberId', t.id, 'name', t.name, 'role', t.role)
                                ORDER BY t.role DESC, t.joined_at, t.id)
                FROM studio_members t WHERE t.studio_id = s.id AND t.left_at IS NULL AND t.role <> 'pupil') AS teachers,
@@ -74,13 +76,19 @@ export class StudiosService {
     return this.get(userId, id);
   }
 
+  /** How long recordings are kept is the owner's to say; for those who agreed before, more days change nothing. */
   async change(userId: string, studioId: string, wanted: StudioChange): Promise<Studio> {
-    await this.access.teacher(userId, studioId);
+    const { role } = await this.access.teacher(userId, studioId);
     const { name, event, recordingsKeptDays } = wanted;
-    await this.dataSource.query(
-      "UPDATE studios SET name = $2, event = $3::jsonb, recordings_kept_days = $4 WHERE id = $1",
-      [studioId, name, event && JSON.stringify(event), recordingsKeptDays],
+    const [, changed]: [unknown, number] = await this.dataSource.query(
+      `UPDATE studios SET name = $2, event = $3::jsonb, recordings_kept_days = $4
+       WHERE id = $1 AND ($5 OR recordings_kept_days = $4)`,
+      [studioId, name, event && JSON.stringify(event), recordingsKeptDays, role === "owner"],
     );
+    if (changed === 0)
+      throw new HttpProblem(403, "owner-only", "Only the owner of this studio says how long recordings are kept.", [
+        { path: "recordingsKeptDays", message: "Only the owner changes this." },
+      ]);
     return this.get(userId, studioId);
   }
 
@@ -128,14 +136,15 @@ export async function makeOwner(manager: EntityManager, studioId: string, member
 }
 
 function toStudio(row: Row): Studio {
-  const { id, name, event, recordingsKeptDays, createdAt, teachers, memberId, memberName, role } = row;
+  const { id, name, event, recordingsKeptDays, agreedDays, createdAt, teachers, memberId, memberName, role } = row;
   return {
     id,
     name,
     me: { memberId, name: memberName, role, consent: consentOf(row) },
     teachers,
     event,
-    recordingsKeptDays,
+    recordingsKeptDays:
+      role === "pupil" ? Math.min(recordingsKeptDays, agreedDays ?? recordingsKeptDays) : recordingsKeptDays,
     counts: role === "pupil" ? null : { pupils: row.pupils, waiting: row.waiting },
     createdAt: createdAt.toISOString(),
   };

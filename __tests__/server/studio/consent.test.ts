@@ -5,7 +5,7 @@ import type { RosterRow } from "../../../shared/contract/studio/roster";
 import { anInstrument, aTake, aVoice } from "../belongings";
 import { clearTraces, mailTo } from "../confirmedPerson";
 import { Person, startTestServer, type TestServer } from "../testServer";
-import { give, pupilIn, studioOf } from "./studioPeople";
+import { give, join, pupilIn, studioOf } from "./studioPeople";
 
 let server: TestServer;
 let teacher: Person;
@@ -186,22 +186,52 @@ describe("a guardian", () => {
     expect((await rowOf(memberId)).consent.shares).toBe(false);
   });
 
-  it("gives the word for a studio, not for the next one: of that one a mail asks anew", async () => {
-    const { person, email, token } = await asked();
-    await post("confirm", token).expect(204);
+  /** A guardian who agreed, and the mail that asks them of a second studio. */
+  const askedTwice = async () => {
+    const pupil = await asked();
+    await post("confirm", pupil.token).expect(204);
+    const { token: keep } = await mailTo(server, pupil.email);
     await clearTraces(server);
-    const other = await Person.put(server, "teacher", true);
-    const elsewhere = await studioOf(other, "Saturday class");
-    await server.database.query(
-      "INSERT INTO studio_members (studio_id, user_id, role, name) VALUES ($1, $2, 'pupil', 'Lowri')",
-      [elsewhere.id, person.id],
-    );
-    expect((await agree(person, true, elsewhere.id).expect(200)).body.me.consent.waitsForGuardian).toBe(true);
-    const { mail, token: second } = await mailTo(server, email);
+    const elsewhere = await studioOf(await Person.put(server, "teacher", true), "Saturday class");
+    const memberId = await join(server, elsewhere.id, pupil.person, { agrees: false, name: "Lowri" });
+    const { me } = (await agree(pupil.person, true, elsewhere.id).expect(200)).body;
+    expect(me.consent.waitsForGuardian).toBe(true);
+    return { ...pupil, keep, elsewhere: { ...elsewhere, memberId }, second: await mailTo(server, pupil.email) };
+  };
+  const sharesIn = async (person: Person, id: string) =>
+    (await person.get(`/api/studios/${id}`).expect(200)).body.me.consent.shares as boolean;
+
+  it("says no to a second studio without undoing the first, and then nobody else can be named for it", async () => {
+    const { person, email, keep, elsewhere, second } = await askedTwice();
+    expect((await post("look", second.token).expect(200)).body).toMatchObject({ link: "ask", confirmed: false });
+    await post("withdraw", second.token).expect(204);
+    expect([await sharesIn(person, studioId), await sharesIn(person, elsewhere.id)]).toEqual([true, false]);
+    const state = guardianState.parse((await person.get("/api/guardian").expect(200)).body);
+    expect(state).toMatchObject({ email, confirmedAt: null, withdrawnAt: null, refusedAt: expect.any(String) });
+    const friend = `${randomUUID()}@orlow-quay.example`;
+    const another = () => person.post("/api/guardian", { email: friend });
+    expect((await another().expect(409)).body).toMatchObject({ code: "guardian-decides", fields: [{ path: "email" }] });
+    await person.post("/api/guardian", { email }).expect(202);
+    await another().expect(409);
+    await person.delete(`/api/studios/${elsewhere.id}/members/${elsewhere.memberId}`).expect(204);
+    await join(server, elsewhere.id, person, { agrees: false });
+    await agree(person, true, elsewhere.id).expect(200);
+    await another().expect(202);
+    // Whoever was named first still has the link by which their own word is taken back.
+    await post("confirm", (await mailTo(server, friend)).token).expect(204);
+    expect((await post("look", keep).expect(200)).body).toMatchObject({ link: "keep", confirmed: true });
+    await post("withdraw", keep).expect(204);
+    expect([await sharesIn(person, studioId), await sharesIn(person, elsewhere.id)]).toEqual([false, false]);
+    await person.post("/api/guardian", { email }).expect(409);
+  });
+
+  it("gives the word for a studio, not for the next one: of that one a mail asks anew", async () => {
+    const { person, elsewhere, second: mailed } = await askedTwice();
+    const { mail, token: second } = mailed;
     expect(mail?.text).toContain("Saturday class");
     expect((await post("look", second).expect(200)).body.studios).toHaveLength(2);
     await post("confirm", second).expect(204);
-    expect((await person.get(`/api/studios/${elsewhere.id}`).expect(200)).body.me.consent.shares).toBe(true);
+    expect(await sharesIn(person, elsewhere.id)).toBe(true);
   });
 
   it("is asked anew by a newer mail only, and never at the pupil's own address", async () => {

@@ -35,8 +35,9 @@ it("opens a studio for anybody, whose account becomes a teacher's", async () => 
 it("is changed by its teachers, deleted by its owner, and to others it does not exist", async () => {
   const { person: pupil } = await pupilIn(server, studioId);
   const outsider = await Person.put(server, "teacher", true);
-  const wanted = { name: "Concert class", event: { name: "Concert", date: "2026-12-10" }, recordingsKeptDays: 30 };
+  const wanted = { name: "Concert class", event: { name: "Concert", date: "2026-12-10" }, recordingsKeptDays: 90 };
   expect((await colleague.put(at(), wanted).expect(200)).body).toMatchObject(wanted);
+  expect(await codeOf(colleague.put(at(), { ...wanted, recordingsKeptDays: 30 }))).toEqual([403, "owner-only"]);
   expect(await codeOf(pupil.put(at(), wanted))).toEqual([403, "teachers-only"]);
   expect(await codeOf(colleague.delete(at()))).toEqual([403, "owner-only"]);
   for (const asked of [outsider.get(at()), outsider.put(at(), wanted), outsider.delete(at())]) await asked.expect(404);
@@ -44,6 +45,32 @@ it("is changed by its teachers, deleted by its owner, and to others it does not 
   await owner.delete(at()).expect(204);
   await owner.get(at()).expect(404);
   await pupil.get(at()).expect(404);
+});
+
+it("keeps recordings no longer than was said when the pupil agreed; fewer days hold for everybody, more from a new yes on", async () => {
+  const { person, memberId } = await pupilIn(server, studioId, { agrees: false });
+  await person.put("/api/account/person", { birthYear: 1980, country: null }).expect(200);
+  const [part] = (await give(owner, studioId, [memberId])).parts;
+  const agree = (yes: boolean) => person.put(at("/consent"), { agree: yes }).expect(200);
+  const keep = (days: number) =>
+    owner.put(at(), { name: "Tuesday evening class", event: null, recordingsKeptDays: days }).expect(200);
+  const kept = async () =>
+    Promise.all(
+      [at(), `/api/parts/${part!.id}`].map(
+        async (path) => (await person.get(path).expect(200)).body.recordingsKeptDays,
+      ),
+    );
+  await agree(true);
+  expect((await keep(365)).body.recordingsKeptDays).toBe(365);
+  expect(await kept()).toEqual([90, 90]);
+  await agree(true);
+  expect(await kept()).toEqual([90, 90]);
+  await keep(30);
+  expect(await kept()).toEqual([30, 30]);
+  await keep(365);
+  await agree(false);
+  await agree(true);
+  expect(await kept()).toEqual([365, 365]);
 });
 
 it("shows a pupil the teachers and nothing of other pupils, not even how many there are", async () => {

@@ -11,7 +11,15 @@ jest.mock("expo-router", () => ({
   Link: ({ href, children }: { href: string; children: React.ReactNode }) => <a href={href}>{children}</a>,
 }));
 
-const alone = { needed: false, age: 16, email: null, askedAt: null, confirmedAt: null, withdrawnAt: null };
+const alone = {
+  needed: false,
+  age: 16,
+  email: null,
+  askedAt: null,
+  confirmedAt: null,
+  withdrawnAt: null,
+  refusedAt: null,
+};
 let server: Answers;
 
 beforeEach(() => {

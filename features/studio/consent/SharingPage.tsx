@@ -101,11 +101,14 @@ interface GuardianCardProps {
   now: Date;
 }
 
-function guardianWords({ age, email, askedAt, confirmedAt, withdrawnAt }: GuardianState, now: Date): string {
+function guardianWords(state: GuardianState, now: Date): string {
+  const { age, email, askedAt, confirmedAt, withdrawnAt, refusedAt } = state;
   if (email === null || askedAt === null)
     return `In your country one agrees alone from ${age} on. Nobody was asked yet.`;
   if (withdrawnAt !== null)
     return `${email} took their word back ${dayOf(withdrawnAt, now)}. Your teachers see only your name.`;
+  if (refusedAt !== null)
+    return `${email} did not agree ${dayOf(refusedAt, now)} to every studio above. Where it says that nobody has confirmed, your teachers see only your name.`;
   if (confirmedAt !== null) return `${email} confirmed ${dayOf(confirmedAt, now)}.`;
   return `${email} was asked ${dayOf(askedAt, now)} and has not answered yet.`;
 }

@@ -45,27 +45,47 @@ export function GuardianPage() {
   );
 }
 
+/** What an answer did. The link that asks says no only where nothing was agreed; the kept one takes all of it back. */
+function doneWords(word: Word, { pupil, link, studios }: GuardianLook): { title: string; text: string } {
+  if (word === "confirm")
+    return {
+      title: "You agreed",
+      text: `${pupil} can share with the teachers from now on. ${
+        link === "ask"
+          ? "A mail brings you a link by which you can take your word back at any time."
+          : "The link that brought you here stays good: by it you can take your word back at any time."
+      }`,
+    };
+  if (link === "keep")
+    return {
+      title: "Nothing is shared",
+      text: `From this moment the teachers see nothing of ${pupil} but the name. Recordings that were handed in are deleted.`,
+    };
+  const [agreed, refused] = [true, false].map((yes) =>
+    listWords(studios.filter(({ confirmed }) => confirmed === yes).map(({ name }) => name)),
+  );
+  const stays = agreed ? ` What you agreed to before stays as it is: ${agreed}.` : "";
+  return {
+    title: "You did not agree",
+    text: `In ${refused} the teachers see nothing of ${pupil} but the name.${stays}`,
+  };
+}
+
+function askedWords({ pupil, confirmed, studios }: GuardianLook): string {
+  if (confirmed) return `You agreed that ${pupil} shares with the teachers what is listed here.`;
+  const asks = `${pupil} would like to share with the teachers what is listed here, and gave your address as that of a parent or guardian.`;
+  return studios.some((studio) => studio.confirmed)
+    ? `${asks} To some of it you agreed before; of the rest nothing is shared until you agree.`
+    : `${asks} Nothing is shared until you agree.`;
+}
+
 function Question({ look, token }: { look: GuardianLook; token: string }) {
   const answer = useMutation({ mutationFn: (word: Word) => http.open(`/guardian/${word}`, { token }) });
-  if (answer.isSuccess)
-    return (
-      <EmptyState
-        testID="guardian-done"
-        title={answer.variables === "confirm" ? "You agreed" : "Nothing is shared"}
-        text={
-          answer.variables === "confirm"
-            ? `${look.pupil} can share with the teachers from now on. A mail brings you a link by which you can take your word back at any time.`
-            : `From this moment the teachers see nothing of ${look.pupil} but the name. Recordings that were handed in are deleted.`
-        }
-      />
-    );
+  if (answer.isSuccess) return <EmptyState testID="guardian-done" {...doneWords(answer.variables, look)} />;
+  const takesBack = look.link === "keep" && look.studios.some(({ confirmed }) => confirmed);
   return (
     <View style={{ gap: 16, maxWidth: 640 }}>
-      <Text>
-        {look.confirmed
-          ? `You agreed that ${look.pupil} shares with the teachers what is listed here. You can take that back at any time.`
-          : `${look.pupil} would like to share with the teachers what is listed here, and gave your address as that of a parent or guardian. Nothing is shared until you agree.`}
-      </Text>
+      <Text>{askedWords(look)}</Text>
       {look.studios.map(({ name, teachers, recordingsKeptDays, confirmed }) => (
         <Card key={name} style={{ gap: 4 }}>
           <Heading level={2}>{name}</Heading>
@@ -93,14 +113,25 @@ function Question({ look, token }: { look: GuardianLook; token: string }) {
             testID="guardian-confirm"
           />
         )}
-        <Button
-          kind="secondary"
-          label={look.confirmed ? "Take my word back" : "I do not agree"}
-          busy={answer.isPending && answer.variables === "withdraw"}
-          onPress={() => answer.mutate("withdraw")}
-          testID="guardian-withdraw"
-        />
+        {(takesBack || !look.confirmed) && (
+          <Button
+            kind="secondary"
+            label={takesBack ? "Take my word back" : "I do not agree"}
+            busy={answer.isPending && answer.variables === "withdraw"}
+            onPress={() => answer.mutate("withdraw")}
+            testID="guardian-withdraw"
+          />
+        )}
       </View>
+      <Text variant="small" tone="soft" testID="guardian-reach">
+        {takesBack
+          ? "Taking your word back holds for every studio, at once, and recordings that were handed in are deleted."
+          : look.link === "keep"
+            ? "You can change your mind at any time by this link."
+            : look.studios.some(({ confirmed }) => confirmed)
+              ? "To take back what you agreed to before, use the link in the mail that came after it."
+              : "You can take a yes back at any time, by a link that comes in a mail after it."}
+      </Text>
     </View>
   );
 }

@@ -52,7 +52,7 @@ function FactsCard({ studio }: { studio: Studio }) {
     <Card style={{ gap: 12 }}>
       <Heading level={2}>The studio</Heading>
       <Form label="The studio" onSubmit={submit}>
-        <StudioFields form={form} />
+        <StudioFields form={form} owner={studio.me.role === "owner"} />
         {kept && <Notice kind="good">Kept.</Notice>}
         <FormEnd small {...end} sendLabel="Keep this" busyLabel="Keeping it" testID="keep-studio" />
       </Form>

@@ -1,12 +1,23 @@
 import type { FieldValues, Path, PathValue, UseFormReturn } from "react-hook-form";
 import { View } from "react-native";
 import { FormField } from "@/features/ui/form/FormField";
+import { Text } from "@/features/ui/Text";
 import { useLayout } from "@/features/ui/useLayout";
 import { DayField } from "../DayField";
+import { plural } from "../roster/rosterWords";
 import { checkKeptDays, checkName, type StudioDraft } from "./studioForm";
 
+interface StudioFieldsProps<Values extends FieldValues> {
+  form: UseFormReturn<Values>;
+  /** how long recordings are kept is the owner's to say */
+  owner?: boolean;
+}
+
 /** The fields that make a studio; those of its owner's name stand in the form of a new one. */
-export function StudioFields<Values extends FieldValues & StudioDraft>({ form }: { form: UseFormReturn<Values> }) {
+export function StudioFields<Values extends FieldValues & StudioDraft>({
+  form,
+  owner = true,
+}: StudioFieldsProps<Values>) {
   const phone = useLayout() === "phone";
   const day = "eventDate" as Path<Values>;
   return (
@@ -39,15 +50,21 @@ export function StudioFields<Values extends FieldValues & StudioDraft>({ form }:
           />
         </View>
       </View>
-      <FormField
-        form={form}
-        name={"keptDays" as Path<Values>}
-        label="Days that recordings are kept"
-        hint="After that they are deleted by themselves. Pupils are told before they agree."
-        check={checkKeptDays}
-        inputMode="numeric"
-        testID="kept-days"
-      />
+      {owner ? (
+        <FormField
+          form={form}
+          name={"keptDays" as Path<Values>}
+          label="Days that recordings are kept"
+          hint="After that they are deleted by themselves. Pupils are told before they agree; more days hold only for those who agree later."
+          check={checkKeptDays}
+          inputMode="numeric"
+          testID="kept-days"
+        />
+      ) : (
+        <Text variant="small" tone="soft">
+          {`Recordings are kept for ${plural(Number(form.getValues("keptDays" as Path<Values>)), "day")}. Only the owner changes that.`}
+        </Text>
+      )}
     </>
   );
 }

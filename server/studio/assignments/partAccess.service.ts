@@ -3,6 +3,7 @@ import type { Part } from "../../../shared/contract/studio/assignment";
 import type { StudioRole } from "../../../shared/contract/studio/studio";
 import { HttpProblem, notFound } from "../../http/httpProblem";
 import { memberShares } from "../consent/digitalConsent";
+import { keptDaysColumn } from "../consent/memberConsent";
 import { notAgreed } from "../studioAccess.service";
 
 type Connection = DataSource | EntityManager;
@@ -46,7 +47,7 @@ export class PartAccessService {
       `SELECT p.id AS "partId", p.studio_id AS "studioId", p.assignment_id AS "assignmentId", p.state,
               m.id AS "memberId", m.user_id AS "userId", m.name AS pupil, u.email, ${memberShares} AS shares,
               me.id AS "myMemberId", me.name AS "myName", me.role AS "myRole",
-              a.song->>'title' AS title, s.recordings_kept_days AS "recordingsKeptDays"
+              a.song->>'title' AS title, ${keptDaysColumn}
        FROM assignment_parts p
        JOIN assignments a ON a.id = p.assignment_id
        JOIN studios s ON s.id = p.studio_id

@@ -2,6 +2,7 @@ import type { DataSource, EntityManager } from "typeorm";
 import type { Part, PartChange, PartListing } from "../../../shared/contract/studio/assignment";
 import { notFound } from "../../http/httpProblem";
 import { enqueueMail } from "../../mail/mail.service";
+import { keptDaysColumn } from "../consent/memberConsent";
 import type { CommentsService } from "./comments.service";
 import { type PartAccess, type PartAccessService, refuseHidden } from "./partAccess.service";
 import { AssignmentPartEntity } from "./assignmentPart.entity";
@@ -42,7 +43,7 @@ export class PartsService {
     const rows: Full[] = await this.dataSource.query(
       `SELECT ${listed}, p.assignment_id AS "assignmentId", p.member_id AS "memberId", p.shift, p.instrument, p.way,
               a.song, a.note, p.note AS "partNote", p.handed_in_at AS "handedInAt", p.effort,
-              s.recordings_kept_days AS "recordingsKeptDays"
+              ${keptDaysColumn}
        FROM ${tables} WHERE p.id = $1`,
       [partId],
     );

@@ -64,7 +64,10 @@ export function consentRoutes(api: Api, { access, studios, consent, guardians, l
       body: { name: "GuardianRequest", schema: guardianRequest },
       answers: {
         202: { description: "A mail is on its way.", schema: { name: "GuardianState", schema: guardianState } },
-        409: { description: "Not needed (no-guardian-needed), or nothing waits for them (nothing-to-confirm)." },
+        409: {
+          description:
+            "Not needed (no-guardian-needed), nothing waits for them (nothing-to-confirm), or another has said no (guardian-decides).",
+        },
         429: tooMany,
       },
     },
@@ -123,7 +126,8 @@ export function consentRoutes(api: Api, { access, studios, consent, guardians, l
       method: "post",
       path: "/guardian/withdraw",
       tag: "guardian",
-      summary: "The guardian says no or takes their word back; effective at once",
+      summary:
+        "By the link that asks: no to the studios that wait. By the link kept: takes back the word for all; at once",
       signedIn: false,
       body: link,
       answers: { 204: { description: "Taken back." }, 410: linkOver, 429: tooMany },

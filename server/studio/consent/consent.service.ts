@@ -31,10 +31,10 @@ export class ConsentService {
         "Say first in which year you were born: it decides who must agree.",
       );
     await manager.query(
-      `UPDATE studio_members SET consent_withdrawn_at = NULL,
-         consent_given_at = CASE WHEN consent_given_at IS NULL OR consent_withdrawn_at IS NOT NULL THEN now()
-                                 ELSE consent_given_at END
-       WHERE id = $1`,
+      `UPDATE studio_members m SET consent_withdrawn_at = NULL, consent_given_at = now(),
+         recordings_kept_days = s.recordings_kept_days
+       FROM studios s
+       WHERE m.id = $1 AND s.id = m.studio_id AND (m.consent_given_at IS NULL OR m.consent_withdrawn_at IS NOT NULL)`,
       [memberId],
     );
     const [waiting]: object[] = await manager.query(
@@ -46,7 +46,7 @@ export class ConsentService {
 
   private async withdraw(manager: EntityManager, memberId: string): Promise<void> {
     await manager.query(
-      `UPDATE studio_members SET consent_withdrawn_at = now()
+      `UPDATE studio_members SET consent_withdrawn_at = now(), recordings_kept_days = NULL
        WHERE id = $1 AND consent_given_at IS NOT NULL AND consent_withdrawn_at IS NULL`,
       [memberId],
     );

@@ -14,6 +14,7 @@ import {
   personNeedsGuardian,
   toldNeedsGuardian,
 } from "./digitalConsent";
+import { keptDaysColumn } from "./memberConsent";
 
 /** To decide, and to change one's mind later. The account's own links end when its address changes; these must not. */
 const askPurpose = "guardian-ask";
@@ -49,11 +50,14 @@ export class GuardiansService {
       askedAt: Date | null;
       confirmedAt: Date | null;
       withdrawnAt: Date | null;
+      refusedAt: Date | null;
       waits: boolean;
     }[] = await this.dataSource.query(
       `SELECT ${personNeedsGuardian} AS needed, u.country, g.email, g.asked_at AS "askedAt",
               g.confirmed_at AS "confirmedAt", g.withdrawn_at AS "withdrawnAt",
-              EXISTS (SELECT FROM studio_members m WHERE m.user_id = u.id AND ${memberWaitsForGuardian}) AS waits
+              EXISTS (SELECT FROM studio_members m WHERE m.user_id = u.id AND ${memberWaitsForGuardian}) AS waits,
+              (SELECT max(m.guardian_refused_at) FROM studio_members m
+               WHERE m.user_id = u.id AND ${memberWaitsForGuardian} AND m.guardian_refused_at >= g.asked_at) AS "refusedAt"
        FROM users u LEFT JOIN guardians g ON g.user_id = u.id WHERE u.id = $1`,
       [userId],
     );
@@ -66,6 +70,7 @@ export class GuardiansService {
       askedAt: instant(row?.askedAt),
       confirmedAt: row?.waits ? null : instant(row?.confirmedAt),
       withdrawnAt: instant(row?.withdrawnAt),
+      refusedAt: instant(row?.refusedAt),
     };
   }
 
@@ -87,7 +92,10 @@ export class GuardiansService {
     throw new HttpProblem(409, "guardian-decides", message, [{ path: "birthYear", message }]);
   }
 
-  /** Names a guardian and writes to them; also to write once more, or to somebody else. */
+  /**
+   * Names a guardian and writes to them; also to write once more, or to somebody else. Nobody else can be asked where
+   * one has said no: as with the birth year, that needs leaving and being invited again.
+   */
   async ask(userId: string, email: string): Promise<void> {
     await this.dataSource.transaction(async (manager) => {
       const [person]: { email: string; needed: boolean | null }[] = await manager.query(
@@ -104,6 +112,7 @@ export class GuardiansService {
         throw new HttpProblem(422, "invalid", "This is your own address.", [
           { path: "email", message: "Write the address of a parent or guardian, not your own." },
         ]);
+      await refuseAnother(manager, userId, email);
       await manager.query(
         `INSERT INTO guardians (user_id, email) VALUES ($1, $2)
          ON CONFLICT (user_id) DO UPDATE SET email = $2, asked_at = now(), withdrawn_at = NULL`,
@@ -125,8 +134,9 @@ export class GuardiansService {
 
   /** What the link is about; null if it is not one of ours any more. */
   async look(token: string): Promise<GuardianLook | null> {
-    const userId = await this.pupilOf(this.dataSource, token);
-    if (userId === null) return null;
+    const found = await this.pupilOf(this.dataSource, token);
+    if (found === null) return null;
+    const { userId, purpose } = found;
     const studios = await this.studiosOf(this.dataSource, userId);
     return {
       pupil: studios[0]?.pupil ?? "",
@@ -135,6 +145,7 @@ export class GuardiansService {
         confirmed: !waits,
       })),
       sees: whatTeachersSee(Math.max(1, ...studios.map(({ recordingsKeptDays }) => recordingsKeptDays))),
+      link: purpose === keepPurpose ? "keep" : "ask",
       confirmed: studios.length > 0 && studios.every(({ waits }) => !waits),
     };
   }
@@ -148,9 +159,10 @@ export class GuardiansService {
       if (!kept || !userId || !(await this.isStillHere(manager, userId))) return false;
       const studios = (await this.studiosOf(manager, userId)).filter(({ waits }) => waits);
       await manager.query(
-        `UPDATE studio_members SET guardian_agreed_at = now() WHERE id IN (
-           SELECT m.id FROM studio_members m JOIN users u ON u.id = m.user_id
-           WHERE m.user_id = $1 AND ${memberWaitsForGuardian})`,
+        `UPDATE studio_members m SET guardian_agreed_at = now(), guardian_refused_at = NULL,
+           recordings_kept_days = least(s.recordings_kept_days, m.recordings_kept_days)
+         FROM studios s, users u
+         WHERE s.id = m.studio_id AND u.id = m.user_id AND m.user_id = $1 AND ${memberWaitsForGuardian}`,
         [userId],
       );
       await manager.query(
@@ -159,7 +171,7 @@ export class GuardiansService {
       );
       if (!spent) return true;
       const keep = await this.tokens.issue(manager, {
-        ...{ purpose: keepPurpose, email: kept.email, lifeS: keepLifeS, subject: userId },
+        ...{ purpose: keepPurpose, email: kept.email, lifeS: keepLifeS, subject: userId, onlyOfAddress: true },
       });
       await enqueueMail(manager, {
         event: `guardian-kept:${keep.id}`,
@@ -174,14 +186,25 @@ export class GuardiansService {
     });
   }
 
-  /** Says no, or takes the word back: at once nothing is shared any more. */
+  /**
+   * By the link that asks, a no to the studios that wait; those agreed to before stay. By the link of the mail that
+   * came after a yes, the word for every studio is taken back: at once nothing is shared any more.
+   */
   async withdraw(token: string): Promise<boolean> {
     return this.dataSource.transaction(async (manager) => {
       const spent = await this.tokens.spend(manager, askPurpose, token);
       const userId = (spent ?? (await this.tokens.look(manager, keepPurpose, token)))?.subject;
       if (!userId || !(await this.isStillHere(manager, userId))) return false;
-      await manager.query("UPDATE guardians SET withdrawn_at = now() WHERE user_id = $1", [userId]);
-      await manager.query("UPDATE studio_members SET guardian_agreed_at = NULL WHERE user_id = $1", [userId]);
+      await manager.query(
+        `UPDATE studio_members SET guardian_agreed_at = NULL, guardian_refused_at = now()
+         WHERE user_id = $1 AND consent_given_at IS NOT NULL AND (guardian_agreed_at IS NULL OR NOT $2)`,
+        [userId, spent !== null],
+      );
+      await manager.query(
+        `UPDATE guardians SET withdrawn_at = now() WHERE user_id = $1 AND NOT EXISTS (
+           SELECT FROM studio_members WHERE user_id = $1 AND left_at IS NULL AND guardian_agreed_at IS NOT NULL)`,
+        [userId],
+      );
       await wakeDeletion(manager);
       return true;
     });
@@ -213,10 +236,10 @@ export class GuardiansService {
     return true;
   }
 
-  private async pupilOf(connection: Connection, token: string): Promise<string | null> {
+  private async pupilOf(connection: Connection, token: string): Promise<{ userId: string; purpose: string } | null> {
     for (const purpose of purposes) {
       const userId = (await this.tokens.look(connection, purpose, token))?.subject;
-      if (userId && (await this.isStillHere(connection, userId))) return userId;
+      if (userId && (await this.isStillHere(connection, userId))) return { userId, purpose };
     }
     return null;
   }
@@ -229,7 +252,7 @@ export class GuardiansService {
   /** Those in which the pupil agreed, whether or not a guardian has. */
   private async studiosOf(connection: Connection, userId: string): Promise<AskedStudio[]> {
     return connection.query(
-      `SELECT s.name, m.name AS pupil, s.recordings_kept_days AS "recordingsKeptDays",
+      `SELECT s.name, m.name AS pupil, ${keptDaysColumn},
               ${memberWaitsForGuardian} AS waits,
               ARRAY(SELECT t.name FROM studio_members t
                     WHERE t.studio_id = s.id AND t.left_at IS NULL AND t.role <> 'pupil'
@@ -240,4 +263,16 @@ export class GuardiansService {
       [userId],
     );
   }
+}
+
+async function refuseAnother(manager: EntityManager, userId: string, email: string): Promise<void> {
+  const rows: object[] = await manager.query(
+    `SELECT FROM guardians g JOIN studio_members m ON m.user_id = g.user_id
+     WHERE g.user_id = $1 AND lower(g.email) <> lower($2) AND m.left_at IS NULL AND m.guardian_refused_at IS NOT NULL`,
+    [userId, email],
+  );
+  if (rows.length === 0) return;
+  const message =
+    "The guardian whom you named has said no, and only they can change that. If it was not your guardian, leave the studio and ask to be invited again.";
+  throw new HttpProblem(409, "guardian-decides", message, [{ path: "email", message }]);
 }

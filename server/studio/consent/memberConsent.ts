@@ -5,6 +5,12 @@ import { memberShares, memberWaitsForGuardian } from "./digitalConsent";
 export const consentColumns = `m.consent_given_at AS "givenAt", m.consent_withdrawn_at AS "withdrawnAt",
   ${memberWaitsForGuardian} AS "waitsForGuardian", ${memberShares} AS shares`;
 
+/**
+ * How long recordings of a member `m` of a studio `s` are kept: what stood there when they agreed, or less where the
+ * studio says less since. More holds only for those who agree to it anew.
+ */
+export const keptDaysColumn = `least(s.recordings_kept_days, m.recordings_kept_days) AS "recordingsKeptDays"`;
+
 export interface ConsentRow {
   givenAt: Date | null;
   withdrawnAt: Date | null;

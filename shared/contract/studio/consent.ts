@@ -26,6 +26,8 @@ export const guardianState = z.strictObject({
   /** for every studio that one is in at present */
   confirmedAt: z.iso.datetime().nullable(),
   withdrawnAt: z.iso.datetime().nullable(),
+  /** said no to a studio that still waits for them, and was not asked again since; others may be confirmed */
+  refusedAt: z.iso.datetime().nullable(),
 });
 export type GuardianState = z.infer<typeof guardianState>;
 
@@ -50,6 +52,8 @@ export const guardianLook = z.strictObject({
   ),
   /** what teachers would see and hear, sentence by sentence, in words to the pupil */
   sees: z.array(z.string()),
+  /** "ask": decides about the studios that wait; "keep": takes back the word for every studio, or gives it again */
+  link: z.enum(["ask", "keep"]),
   /** the guardian has agreed for all these studios */
   confirmed: z.boolean(),
 });

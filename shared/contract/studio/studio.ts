@@ -25,7 +25,7 @@ export const studio = z.strictObject({
   teachers: z.array(z.strictObject({ memberId: z.uuid(), name: z.string(), role: studioRole })),
   /** an evening that the studio works towards */
   event: event.nullable(),
-  /** days after which recordings handed in are deleted */
+  /** days after which recordings handed in are deleted; to a pupil, no more than when they agreed */
   recordingsKeptDays: keptDays,
   /** how many pupils there are, and how many takes wait for an answer; null for a pupil */
   counts: z.strictObject({ pupils: z.int(), waiting: z.int() }).nullable(),
@@ -43,7 +43,7 @@ export const newStudio = z.strictObject({
 });
 export type NewStudio = z.infer<typeof newStudio>;
 
-/** What its teachers may change of a studio. */
+/** What its teachers may change of a studio; how long recordings are kept, only its owner. */
 export const studioChange = z.strictObject({ name: studioName, event: event.nullable(), recordingsKeptDays: keptDays });
 export type StudioChange = z.infer<typeof studioChange>;
 

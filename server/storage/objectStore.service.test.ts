@@ -99,7 +99,10 @@ it("says whether it is up", async () => {
 
 it("refuses a client that signs with another secret", async () => {
   const stranger = new ObjectStore({ ...s3.settings, secretAccessKey: "guessed" });
-  await expect(stranger.read("mine")).rejects.toMatchObject({ name: "SignatureDoesNotMatch" });
+  await expect(stranger.read("mine")).rejects.toMatchObject({
+    ...{ status: 503, code: "storage-down" },
+    cause: { name: "SignatureDoesNotMatch" },
+  });
 });
 
 it.each([

@@ -1,5 +1,6 @@
 import type { S3Client, S3ClientConfig } from "@aws-sdk/client-s3";
 import type { StorageSettings } from "../env";
+import { HttpProblem } from "../http/httpProblem";
 
 /** How a take in the storage is reached for a while. */
 export interface SignedLink {
@@ -28,6 +29,12 @@ export function clientConfig({ endpoint, region, pathStyle, accessKeyId, secretA
     responseChecksumValidation: "WHEN_REQUIRED",
     maxAttempts: 3,
   } satisfies S3ClientConfig;
+}
+
+/** The storage does not do what it is asked; `cause` is for the log. */
+export function storageDown(cause?: unknown): HttpProblem {
+  const message = "The storage of recordings does not answer. Nothing was lost; try again in a moment.";
+  return Object.assign(new HttpProblem(503, "storage-down", message), { cause });
 }
 
 /** The objects of one bucket: sound that was handed in. The SDK is loaded when it is first needed: it is heavy. */
@@ -101,7 +108,7 @@ export class ObjectStore {
       return await ask((await this.connect()).inside);
     } catch (error) {
       if (error instanceof Error && ["NoSuchKey", "NotFound"].includes(error.name)) return null;
-      throw error;
+      throw storageDown(error);
     }
   }
 

@@ -1,7 +1,7 @@
 import type { Request, Response } from "express";
 import type { Server } from "@tus/server";
 import { HttpProblem } from "../../http/httpProblem";
-import { clientConfig, type ObjectStore } from "../../storage/objectStore.service";
+import { clientConfig, type ObjectStore, storageDown } from "../../storage/objectStore.service";
 import type { UploadLocks } from "./uploadLocks";
 
 /** How long a request that was told to let go of an upload may still write. */
@@ -109,10 +109,3 @@ export async function orStorageDown<Result>(asked: Promise<Result>): Promise<Res
     throw error instanceof HttpProblem ? error : storageDown();
   });
 }
-
-const storageDown = () =>
-  new HttpProblem(
-    503,
-    "storage-down",
-    "The storage of recordings does not answer. Nothing was lost; the rest is sent in a moment.",
-  );

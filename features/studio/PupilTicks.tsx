@@ -33,7 +33,7 @@ export function PupilTicks({ label, pupils, chosen, onChosen }: PupilTicksProps)
 }
 
 /** The same choice with one more or one less. */
-export function withOne(chosen: ReadonlySet<string>, id: string, on: boolean): ReadonlySet<string> {
+function withOne(chosen: ReadonlySet<string>, id: string, on: boolean): ReadonlySet<string> {
   const next = new Set(chosen);
   if (on) next.add(id);
   else next.delete(id);

@@ -15,7 +15,7 @@ export function dayOf(moment: string | Date, now: Date): string {
 export const dayInWords = (day: string): string => long.format(atNoon(day)).replace(",", "");
 
 /** "Tue 24 Nov" of a day in the calendar. */
-export const shortDay = (day: string, now: Date): string => dayOf(atNoon(day), now);
+const shortDay = (day: string, now: Date): string => dayOf(atNoon(day), now);
 
 /** Days from now to a day in the calendar; negative = past. */
 export function daysUntil(day: string, now: Date): number {

@@ -27,7 +27,7 @@ import { WhoControls } from "./WhoControls";
 import { useAssignment } from "./useAssignment";
 
 /** A song on one pupil's instrument. */
-export interface WantedWays {
+interface WantedWays {
   piece: Piece;
   instrument: Instrument;
   wishes: RosterRow["wishes"];

@@ -7,7 +7,7 @@ export interface ReadAddresses {
 }
 
 /** How many are invited at once at most. */
-export const mostAtOnce = 50;
+const mostAtOnce = 50;
 
 const address = /^[^\s@<>]+@[^\s@<>.]+(?:\.[^\s@<>.]+)+$/;
 

@@ -10,7 +10,7 @@ export interface InKey {
 }
 
 /** The shift that most of a class sing at; of equally many the one nearest to the chart. */
-export function commonShift(pupils: readonly Pick<PupilKey, "shift">[]): number {
+function commonShift(pupils: readonly Pick<PupilKey, "shift">[]): number {
   const counts = new Map<number, number>();
   for (const { shift } of pupils) counts.set(shift, (counts.get(shift) ?? 0) + 1);
   const [most] = [...counts].sort(([a, n], [b, m]) => m - n || Math.abs(a) - Math.abs(b) || a - b);

@@ -5,7 +5,7 @@ export function clockWords(seconds: number): string {
 }
 
 /** A time as it is typed, "0:42" or "42"; null where it is none, or lies after the end of the take. */
-export function readClock(text: string, endS: number): number | null {
+function readClock(text: string, endS: number): number | null {
   const found = /^\s*(?:(\d{1,2}):)?(\d{1,3})\s*$/.exec(text);
   if (!found) return null;
   const seconds = Number(found[1] ?? 0) * 60 + Number(found[2]);

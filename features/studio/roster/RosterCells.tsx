@@ -126,7 +126,7 @@ export function LookAfter({ row }: { row: RosterRow }) {
   return <>{words}</>;
 }
 
-export function Blank({ words }: { words: string }) {
+function Blank({ words }: { words: string }) {
   return (
     <>
       <span aria-hidden style={{ color: colors.inkSoft }}>

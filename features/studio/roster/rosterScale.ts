@@ -2,7 +2,7 @@ import type { Scale } from "@/features/span/ladderGeometry";
 import type { RosterRow } from "@/shared/contract/studio/roster";
 
 /** px a semitone where there is room for it. */
-export const semitone = 9;
+const semitone = 9;
 /** Semitones of air at both ends, for the names of the ends. */
 const air = 4;
 

@@ -34,7 +34,7 @@ export const checkKeptDays = (days: string): string | null =>
   /^\d{1,3}$/.test(days.trim()) && Number(days) >= 1 && Number(days) <= 365 ? null : "Choose from 1 to 365 days.";
 
 /** A day may be left empty. */
-export const checkDay = (day: string): string | null =>
+const checkDay = (day: string): string | null =>
   day.trim() === "" || isDay(day.trim()) ? null : "Give the day as in 2026-12-10.";
 
 /** What was typed, as the server takes it. An evening without a day is none. */

@@ -16,7 +16,7 @@ import { takeSender } from "./takeSender";
 import { useSendings } from "./useSendings";
 
 /** A take that was sung and measured; its sound is made when it is handed in. */
-export interface TakeToHandIn
+interface TakeToHandIn
   extends Pick<HandInRequest, "id" | "effort" | "measures">, Pick<TakePicture, "trail" | "tune"> {
   tonic: string;
   shift: number;

@@ -1,6 +1,6 @@
 import { createStore, del, set, values } from "idb-keyval";
 import type { HandInRequest } from "@/shared/contract/studio/handIn";
-import { noteUnsent } from "./resumeUnsent";
+import { unsentHint } from "./unsentHint";
 
 /** A recording that waits on this device until the server has it. */
 export interface UnsentTake {
@@ -24,12 +24,12 @@ const store = (() => {
 /** Keeps it on the device, over reloads, until `forgetUnsent`. */
 export async function keepUnsent(take: UnsentTake): Promise<void> {
   await set(take.id, take, store());
-  noteUnsent(true);
+  unsentHint.note(true);
 }
 
 export async function unsentOf(accountId: string): Promise<UnsentTake[]> {
   const all = await values<UnsentTake>(store());
-  noteUnsent(all.length > 0);
+  unsentHint.note(all.length > 0);
   return all.filter((take) => take.accountId === accountId).sort((a, b) => (a.at < b.at ? -1 : 1));
 }
 

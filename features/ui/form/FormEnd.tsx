@@ -5,7 +5,7 @@ import { LiveText } from "../LiveText";
 import { Notice } from "../Notice";
 
 /** How far the sending of a form has come. */
-export interface FormProgress {
+interface FormProgress {
   /** what was refused and belongs to no field */
   refusal: { code: string; message: string } | null;
   sending: boolean;

@@ -3,7 +3,7 @@ import { mkdir, readdir, readFile, rename, rm, writeFile } from "node:fs/promise
 import path from "node:path";
 
 /** What is kept beside the bytes of an object. */
-export interface ObjectHeaders {
+interface ObjectHeaders {
   type: string;
   etag: string;
   /** x-amz-meta-… */

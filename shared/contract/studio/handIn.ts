@@ -3,7 +3,7 @@ import { songTry } from "../try";
 import { mostTakeBytes, mostTakeS } from "./takeLimits";
 
 /** The sound and the pitch of a recording as a picture; made on the device that recorded it. */
-export const takePicture = z.strictObject({
+const takePicture = z.strictObject({
   /** how loud it is from beginning to end, in steps of equal length: 0 silent, 1 as loud as can be */
   waveform: z.array(z.number().min(0).max(1)).max(400),
   /** sung pitch: seconds from the beginning, and fractional MIDI numbers */

@@ -33,10 +33,6 @@ export const checkPerson = (name: string): string | null => {
 export const checkKeptDays = (days: string): string | null =>
   /^\d{1,3}$/.test(days.trim()) && Number(days) >= 1 && Number(days) <= 365 ? null : "Choose from 1 to 365 days.";
 
-/** A day may be left empty. */
-const checkDay = (day: string): string | null =>
-  day.trim() === "" || isDay(day.trim()) ? null : "Give the day as in 2026-12-10.";
-
 /** What was typed, as the server takes it. An evening without a day is none. */
 export function readDraft({ name, eventName, eventDate, keptDays }: StudioDraft): StudioChange {
   const day = eventDate.trim();

@@ -107,6 +107,7 @@ test("a pupil joins from the mail and gets a song in their own key; without cons
 
   await home.page.goto("/account/sharing");
   await home.page.getByTestId("consent-switch").click();
+  await home.page.getByTestId("remove-confirmed").click();
   await home.page
     .getByTestId("consent-state")
     .getByText(/see only your name/)

@@ -115,6 +115,7 @@ it("makes its schemas from the contracts", async () => {
       "Password",
       "PasswordAndCode",
       "PersonFacts",
+      "PersonFactsChange",
       "RecoveryCodes",
       "Reset",
       "RoleChange",

@@ -71,6 +71,29 @@ describe("without consent", () => {
   });
 });
 
+describe("another birth year", () => {
+  it("that would end sharing is refused until it is said that recordings go; then they go", async () => {
+    const { pupil, partId } = place;
+    const key = await keyOf(await handIn(pupil, partId));
+    const born = { birthYear: new Date().getUTCFullYear() - 12, country: "DE" };
+    const { body } = await pupil.put("/api/account/person", born).expect(409);
+    expect([body.code, body.message]).toEqual(["ends-sharing", expect.stringContaining("Tuesday upstairs")]);
+    expect((await pupil.get("/api/account/person").expect(200)).body.birthYear).toBe(1990);
+    await pupil.put("/api/account/person", { birthYear: null, country: "DE" }).expect(409);
+    await sweep();
+    expect(await held(key)).toContain(key);
+    await pupil.put("/api/account/person", { ...born, endsSharing: true }).expect(200, born);
+    await sweep();
+    expect(await held(key)).toEqual([]);
+  });
+
+  it("that ends nothing is not asked about: an older one, or where nothing is shared", async () => {
+    await place.pupil.put("/api/account/person", { birthYear: 1960, country: "FR" }).expect(200);
+    await withdraw();
+    await place.pupil.put("/api/account/person", { birthYear: 2018, country: "FR" }).expect(200);
+  });
+});
+
 describe("going", () => {
   it("a take expires: out of the storage, with a record, and its place in the thread stays", async () => {
     const { pupil, teacher, partId } = place;

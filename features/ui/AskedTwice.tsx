@@ -1,4 +1,4 @@
-import { useEffect, useRef, useState } from "react";
+import { useEffect, useRef, useState, type ReactNode } from "react";
 import { View } from "react-native";
 import { Button } from "./Button";
 import type { IconName } from "./Icon";
@@ -21,6 +21,8 @@ export interface AskedTwiceProps {
   /** "Delete it" and "Keep it" unless something else is asked */
   confirmLabel?: string;
   keepLabel?: string;
+  /** what asks, where it is no plain button */
+  opener?: (ask: () => void) => ReactNode;
   onRemove: () => void;
   busy: boolean;
   error: Error | null;
@@ -38,6 +40,7 @@ export function AskedTwice({
   icon = "trash",
   confirmLabel = "Delete it",
   keepLabel = "Keep it",
+  opener: shownOpener,
   onRemove,
   busy,
   error,
@@ -48,7 +51,7 @@ export function AskedTwice({
   const opener = useRef<HTMLDivElement>(null);
   const keep = () => {
     setAsked(false);
-    requestAnimationFrame(() => opener.current?.querySelector("button")?.focus());
+    requestAnimationFrame(() => opener.current?.querySelector<HTMLElement>("button, [role=switch]")?.focus());
   };
   useEffect(() => {
     if (!asked) return;
@@ -59,15 +62,19 @@ export function AskedTwice({
   if (!asked)
     return (
       <div ref={opener}>
-        <Button
-          kind="text"
-          small
-          {...(icon === null ? null : { icon })}
-          {...(accessibleName === undefined ? null : { accessibleName })}
-          label={label}
-          onPress={() => setAsked(true)}
-          testID={testID}
-        />
+        {shownOpener ? (
+          shownOpener(() => setAsked(true))
+        ) : (
+          <Button
+            kind="text"
+            small
+            {...(icon === null ? null : { icon })}
+            {...(accessibleName === undefined ? null : { accessibleName })}
+            label={label}
+            onPress={() => setAsked(true)}
+            testID={testID}
+          />
+        )}
       </div>
     );
   return (

@@ -6,12 +6,14 @@ import {
   openSession,
   passwordRequest,
   personFacts,
+  personFactsChange,
 } from "../../shared/contract/account";
 import type { Api } from "../http/api";
 import { currentSessionId, currentUserId } from "../http/currentUser";
 import { notFound } from "../http/httpProblem";
 import { idIn } from "../http/ownedCollection.router";
 import { parse } from "../http/parse";
+import { refuseEndOfSharing } from "../studio/consent/endOfSharing.service";
 import type { GuardiansService } from "../studio/consent/guardians.service";
 import { addressOf, type AuthParts, tellOwner } from "./authParts";
 import { askForErasure } from "./erasure";
@@ -55,16 +57,21 @@ export function accountRoutes(
       tag,
       summary: "Tell birth year and country, or take them back",
       signedIn: true,
-      body: facts,
+      body: { name: "PersonFactsChange", schema: personFactsChange },
       answers: {
         200: { description: "Saved.", schema: facts },
-        409: { description: "A guardian decides in a studio, and this would make them needless (guardian-decides)." },
+        409: {
+          description:
+            "A guardian decides in a studio, and this would make them needless (guardian-decides); or sharing in a studio would end and recordings be deleted, and endsSharing is not true (ends-sharing).",
+        },
       },
     },
     async (req, res) => {
-      const told = parse(personFacts, req.body);
-      await guardians.refuseOlder(currentUserId(res), told);
-      await accounts.setFacts(currentUserId(res), told);
+      const { endsSharing = false, ...told } = parse(personFactsChange, req.body);
+      const userId = currentUserId(res);
+      await guardians.refuseOlder(userId, told);
+      if (!endsSharing) await refuseEndOfSharing(dataSource, userId, told);
+      await accounts.setFacts(userId, told);
       res.json(told);
     },
   );

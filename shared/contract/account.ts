@@ -105,3 +105,10 @@ export const personFacts = z.strictObject({
     .nullable(),
 });
 export type PersonFacts = z.infer<typeof personFacts>;
+
+/** The same as it is told. */
+export const personFactsChange = personFacts.extend({
+  /** agrees that sharing with teachers ends by it, and recordings handed in are deleted */
+  endsSharing: z.boolean().exactOptional(),
+});
+export type PersonFactsChange = z.infer<typeof personFactsChange>;

@@ -28,6 +28,25 @@ it("keeps year and country, and takes them back when they are emptied", async ()
   expect(stage.sent(keeps)).toEqual([{ birthYear: null, country: null }]);
 });
 
+it("asks first where the year would end sharing and delete recordings, and keeps the old one unless that is meant", async () => {
+  const keeps = "PUT /account/person";
+  stage.answers[keeps] = refusal(409, "ends-sharing", "What you handed in there is deleted for good.");
+  show(<DataPage />);
+  await screen.findByTestId("birth-year");
+  type("Year of birth", "2019");
+  submit("About you");
+  expect((await screen.findByTestId("ends-sharing")).textContent).toMatch(/deleted for good/);
+  fireEvent.click(screen.getByTestId("go-on-sharing"));
+  expect(valueOf("Year of birth")).toBe("1979");
+  type("Year of birth", "2019");
+  submit("About you");
+  await screen.findByTestId("ends-sharing");
+  stage.answers[keeps] = { status: 200, body: { birthYear: 2019, country: "DE" } };
+  fireEvent.click(screen.getByTestId("end-sharing"));
+  expect(await screen.findByText("Kept.")).toBeTruthy();
+  expect(stage.sent(keeps).at(-1)).toEqual({ birthYear: 2019, country: "DE", endsSharing: true });
+});
+
 it("says at the field that a year is none, sends nothing, and keeps what was typed", async () => {
   show(<DataPage />);
   await screen.findByTestId("birth-year");

@@ -24,6 +24,7 @@ let server: Answers;
 
 beforeEach(() => {
   queryClient.clear();
+  Element.prototype.scrollIntoView = () => undefined;
   server = new Answers().to("GET /guardian", alone);
   server.install();
 });
@@ -37,7 +38,7 @@ const open = () =>
     </QueryClientProvider>,
   );
 
-it("takes an agreement back with one press, and says what holds from then on", async () => {
+it("takes an agreement back after it was said that recordings go, and says what holds from then on", async () => {
   server.to("GET /studios", [asPupil()]);
   open();
   const agreed = await screen.findByTestId("consent-switch");
@@ -45,6 +46,9 @@ it("takes an agreement back with one press, and says what holds from then on", a
   const withdrawn = asPupil({ shares: false, withdrawnAt: "2026-11-25T12:00:00.000Z" });
   server.to(`PUT /studios/${studioId}/consent`, withdrawn).to("GET /studios", [withdrawn]);
   fireEvent.click(agreed);
+  expect(server.bodiesOf(`PUT /studios/${studioId}/consent`)).toEqual([]);
+  expect(screen.getByTestId("remove-asked").textContent).toMatch(/Tuesday evening class .* deleted for good/);
+  fireEvent.click(screen.getByTestId("remove-confirmed"));
   await waitFor(() => expect(screen.getByTestId("consent-state").textContent).toMatch(/see only your name/));
   expect(server.bodiesOf(`PUT /studios/${studioId}/consent`)).toEqual([{ agree: false }]);
 });
@@ -68,8 +72,17 @@ it("tells those under age how far their guardian is", async () => {
   );
 });
 
+it("keeps to hand what somebody agreed to as a pupil, when they teach there now", async () => {
+  const promoted = asPupil();
+  server.to("GET /studios", [{ ...promoted, me: { ...promoted.me, role: "co-teacher" } }]);
+  open();
+  expect((await screen.findByTestId("consent-switch")).getAttribute("aria-checked")).toBe("true");
+});
+
 it("shows nothing to take back to those who are a pupil nowhere", async () => {
-  server.to("GET /studios", [aStudio()]);
+  const { me, ...rest } = aStudio();
+  const never = { ...me.consent, givenAt: null };
+  server.to("GET /studios", [{ ...rest, me: { ...me, consent: never } }]);
   open();
   expect(await screen.findByTestId("nothing-shared")).toBeTruthy();
 });

@@ -1,6 +1,7 @@
 import { useQuery } from "@tanstack/react-query";
 import type { Href } from "expo-router";
 import { http } from "@/features/api/httpClient";
+import { AskedTwice } from "@/features/ui/AskedTwice";
 import { Card } from "@/features/ui/Card";
 import { EmptyState } from "@/features/ui/EmptyState";
 import { Heading } from "@/features/ui/Heading";
@@ -28,7 +29,7 @@ export function SharingPage({ now }: { now: Date }) {
   return (
     <QueryState query={studios} title="What you agreed to could not be opened">
       {(all) => {
-        const joined = all.filter((studio) => !teaches(studio));
+        const joined = all.filter((studio) => !teaches(studio) || stands(studio));
         if (joined.length === 0)
           return (
             <EmptyState
@@ -56,7 +57,12 @@ export function SharingPage({ now }: { now: Date }) {
   );
 }
 
+/** What one agreed to as a pupil holds on when one teaches there, until it is taken back. */
+const stands = ({ me: { consent } }: Studio): boolean => consent.givenAt !== null && consent.withdrawnAt === null;
+
 const agreed = ({ me: { consent } }: Studio): boolean => consent.shares || consent.waitsForGuardian;
+
+const seen = "My teachers see what is listed below";
 
 function ConsentCard({ studio, now }: { studio: Studio; now: Date }) {
   const { consent } = studio.me;
@@ -67,18 +73,42 @@ function ConsentCard({ studio, now }: { studio: Studio; now: Date }) {
       <Heading level={2}>{studio.name}</Heading>
       <Text variant="small" tone="soft">{`With ${listWords(studio.teachers.map(({ name }) => name))}`}</Text>
       <Text testID="consent-state">{consentWords(studio)}</Text>
-      <Switch
-        label="My teachers see what is listed below"
-        hint={
-          consent.shares && consent.givenAt !== null
-            ? `Agreed ${dayOf(consent.givenAt, now)}. Switched off, they see only your name from that moment.`
-            : "Switched off: they see only your name."
-        }
-        on={agreed(studio)}
-        onChange={(agree) => set.mutate(agree)}
-        testID="consent-switch"
-      />
-      {set.error && (
+      {agreed(studio) ? (
+        <AskedTwice
+          label={seen}
+          opener={(ask) => (
+            <Switch
+              label={seen}
+              hint={
+                consent.shares && consent.givenAt !== null
+                  ? `Agreed ${dayOf(consent.givenAt, now)}. Switched off, they see only your name from that moment.`
+                  : "Switched off: they see only your name."
+              }
+              on
+              onChange={ask}
+              testID="consent-switch"
+            />
+          )}
+          question="Stop sharing?"
+          text={`From that moment they see only your name. What you handed in to ${studio.name} and the recorded answers are deleted for good.`}
+          failed="Nothing was changed."
+          confirmLabel="Stop and delete them"
+          keepLabel="Go on sharing"
+          onRemove={() => set.mutate(false)}
+          busy={set.isPending}
+          error={set.error}
+          testID="stop-sharing"
+        />
+      ) : (
+        <Switch
+          label={seen}
+          hint="Switched off: they see only your name."
+          on={false}
+          onChange={() => set.mutate(true)}
+          testID="consent-switch"
+        />
+      )}
+      {set.error && !agreed(studio) && (
         <Notice
           kind={needsYear ? "caution" : "error"}
           title={needsYear ? "Tell the year of your birth first" : "Nothing was changed"}

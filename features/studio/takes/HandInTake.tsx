@@ -1,6 +1,7 @@
 import { useMutation, useQuery } from "@tanstack/react-query";
 import type { Href } from "expo-router";
 import { View } from "react-native";
+import { newId } from "@/features/api/newId";
 import { useSession } from "@/features/api/SessionProvider";
 import { Button } from "@/features/ui/Button";
 import { Card } from "@/features/ui/Card";
@@ -34,16 +35,18 @@ export function HandInTake({ songId, take, sound }: HandInTakeProps) {
   const { account } = useSession();
   const parts = useQuery({ ...studioQueries.parts(), enabled: account !== null });
   const listed = (parts.data ?? []).find((part) => part.songId === songId);
-  const part = useQuery({ ...studioQueries.part(listed?.id ?? ""), enabled: listed !== undefined }).data;
-  const [sending] = useSendings(listed?.id ?? "").filter(({ id }) => id === take.id);
-  const { id, effort, measures, trail, tune, tonic, shift } = take;
+  const asked = useQuery({ ...studioQueries.part(listed?.id ?? ""), enabled: listed !== undefined });
+  const part = asked.data;
+  const sending = useSendings(listed?.id ?? "").findLast(({ takeId }) => takeId === take.id);
+  const { effort, measures, trail, tune, tonic, shift } = take;
   const send = useMutation({
     mutationFn: async () => {
       const made = await sound();
       if (!made || !account || !listed) throw new Error("The sound of this take is gone. Sing it once more.");
       const { durationS, waveform } = made;
+      const id = newId();
       await takeSender.handIn({
-        ...{ id, accountId: account.id, partId: listed.id, title: listed.title, sound: made.sound },
+        ...{ id, takeId: take.id, accountId: account.id, partId: listed.id, title: listed.title, sound: made.sound },
         request: {
           ...{ id, kind: "pupil-take", bytes: made.sound.size, durationS, effort, measures },
           picture: { waveform, trail, tune },
@@ -53,6 +56,17 @@ export function HandInTake({ songId, take, sound }: HandInTakeProps) {
     },
     networkMode: "always",
   });
+  const failed = [parts, asked].find(({ data, isError }) => data === undefined && isError);
+  if (failed)
+    return (
+      <Notice
+        kind="caution"
+        testID="hand-in-unknown"
+        action={<Button kind="text" small icon="again" label="Look again" onPress={() => void failed.refetch()} />}
+      >
+        Whether a teacher gave you this song could not be looked up, so it cannot be handed in here now.
+      </Notice>
+    );
   if (!listed || !part) return null;
   const teacher = part.assignedBy ?? "your teacher";
   const otherKey = part.tonic !== tonic || part.shift !== shift;

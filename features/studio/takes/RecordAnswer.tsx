@@ -17,13 +17,18 @@ export function RecordAnswer({ part }: { part: Part }) {
   const { account } = useSession();
   const [begun, setBegun] = useState<number | null>(null);
   const [seconds, setSeconds] = useState(0);
+  /** recorded, and not yet safe on this device */
+  const [unsent, setUnsent] = useState<Blob | null>(null);
   const recording = useRef<Recording | null>(null);
+  const left = useRef(false);
   const start = useMutation({
     networkMode: "always",
     mutationFn: async () => {
-      recording.current = await recordSound().catch(() => {
+      const running = await recordSound().catch(() => {
         throw new Error("The microphone could not be used. Allow it for this page, then try again.");
       });
+      if (left.current) return running.drop();
+      recording.current = running;
       setSeconds(0);
       setBegun(Date.now());
     },
@@ -31,13 +36,15 @@ export function RecordAnswer({ part }: { part: Part }) {
   const send = useMutation({
     networkMode: "always",
     mutationFn: async () => {
-      const sound = await recording.current?.stop();
+      const running = recording.current;
       recording.current = null;
       setBegun(null);
+      const sound = running ? await running.stop() : unsent;
       if (!sound || !account) return;
+      setUnsent(sound);
       const { durationS, waveform } = await readSound(sound);
       if (sound.size > mostTakeBytes || durationS > mostTakeS)
-        throw new Error("This is too long: an answer may last ten minutes.");
+        throw new Error("This is too long: an answer may last ten minutes. Forget it and record a shorter one.");
       const id = newId();
       await takeSender.handIn({
         ...{ id, accountId: account.id, partId: part.id, title: part.title, sound },
@@ -47,6 +54,7 @@ export function RecordAnswer({ part }: { part: Part }) {
         },
         at: new Date().toISOString(),
       });
+      setUnsent(null);
     },
   });
   const { mutate: sendNow } = send;
@@ -55,17 +63,38 @@ export function RecordAnswer({ part }: { part: Part }) {
     const timer = setInterval(() => {
       const passed = (Date.now() - begun) / 1000;
       setSeconds(passed);
-      if (passed >= mostTakeS - 1) sendNow();
+      if (passed < mostTakeS - 1) return;
+      clearInterval(timer);
+      sendNow();
     }, 250);
     return () => clearInterval(timer);
   }, [begun, sendNow]);
-  useEffect(() => () => recording.current?.drop(), []);
+  useEffect(() => {
+    left.current = false;
+    return () => {
+      left.current = true;
+      recording.current?.drop();
+    };
+  }, []);
   const problem = start.error ?? send.error;
   return (
     <View style={{ gap: 8 }} testID="record-answer">
       <LiveText hidden>{begun === null ? "" : "Recording your answer."}</LiveText>
       <View style={{ flexDirection: "row", flexWrap: "wrap", gap: 10 }}>
-        {begun === null ? (
+        {begun === null && unsent !== null && !send.isPending ? (
+          <>
+            <Button small icon="again" label="Try again" onPress={() => send.mutate()} testID="send-answer-again" />
+            <Button
+              kind="text"
+              small
+              label="Forget it"
+              onPress={() => {
+                setUnsent(null);
+                send.reset();
+              }}
+            />
+          </>
+        ) : begun === null ? (
           <Button
             kind="secondary"
             small
@@ -98,7 +127,7 @@ export function RecordAnswer({ part }: { part: Part }) {
         )}
       </View>
       {problem && (
-        <Notice kind="error" title="Not recorded">
+        <Notice kind="error" title={unsent === null ? "Not recorded" : "Recorded, not sent yet"}>
           {problem.message}
         </Notice>
       )}

@@ -19,10 +19,13 @@ export async function recordSound(): Promise<Recording> {
   return {
     stop: () =>
       new Promise((resolve) => {
-        recorder.addEventListener("stop", () => {
+        const end = () => {
           release();
           resolve(new Blob(pieces, { type: recorder.mimeType }));
-        });
+        };
+        // It ends by itself when the microphone is taken away.
+        if (recorder.state === "inactive") return end();
+        recorder.addEventListener("stop", end);
         recorder.stop();
       }),
     drop: () => {

@@ -14,6 +14,19 @@ jest.mock("./unsentTakes", () => ({
 jest.mock("./uploadTake", () => ({
   uploadTake: (take: UnsentTake, onSent: (bytes: number) => void) => mockUpload(take, onSent),
 }));
+const mockSession = { id: "maren" as string | null, listeners: new Set<() => void>() };
+jest.mock("@/features/api/session", () => ({
+  session: {
+    current: () => ({ account: mockSession.id === null ? null : { id: mockSession.id } }),
+    subscribe: (listener: () => void) => mockSession.listeners.add(listener),
+  },
+}));
+
+/** Somebody else signs in, or nobody is signed in. */
+function become(id: string | null): void {
+  mockSession.id = id;
+  for (const listener of [...mockSession.listeners]) listener();
+}
 
 const aTake = (id = "one"): UnsentTake => ({
   ...{ id, accountId: "maren", partId: "part", title: "Slack Water", at: "2026-12-01T19:20:00.000Z" },
@@ -38,6 +51,7 @@ const settled = () => jest.advanceTimersByTimeAsync(0);
 beforeEach(() => {
   jest.useFakeTimers();
   mockDevice.clear();
+  become("maren");
   mockUpload.mockReset();
 });
 afterEach(() => jest.useRealTimers());
@@ -97,4 +111,36 @@ it("says why a take is refused, keeps it, and forgets it only when it is given u
   expect(mockUpload).toHaveBeenCalledTimes(1);
   await sender.giveUp("one");
   expect([mockDevice.size, sender.current()]).toEqual([0, []]);
+});
+
+it("shows and sends nothing of one's own to whoever uses this device next, and goes on when one is back", async () => {
+  const sender = reload();
+  mockUpload.mockImplementation(() => Promise.reject(new Problem(0, "offline", "Away.")));
+  await sender.handIn(aTake());
+  await settled();
+  become("ida");
+  expect(sender.current()).toEqual([]);
+  mockUpload.mockClear();
+  mockUpload.mockResolvedValue(arrived);
+  window.dispatchEvent(new Event("online"));
+  sender.again("one");
+  await jest.advanceTimersByTimeAsync(120_000);
+  expect(mockUpload).not.toHaveBeenCalled();
+  expect(mockDevice.has("one")).toBe(true);
+  become("maren");
+  await sender.resume("maren");
+  await settled();
+  expect(mockUpload).toHaveBeenCalledTimes(1);
+  expect(mockDevice.size).toBe(0);
+});
+
+it("keeps on the device what the next account's session broke off", async () => {
+  const sender = reload();
+  let fail: (reason: Error) => void = () => undefined;
+  mockUpload.mockImplementation(() => new Promise((_resolve, reject) => (fail = reject)));
+  await sender.handIn(aTake());
+  become("ida");
+  fail(new Problem(403, "not-yours", "Not yours."));
+  await jest.advanceTimersByTimeAsync(120_000);
+  expect([sender.current(), mockUpload.mock.calls.length, mockDevice.has("one")]).toEqual([[], 1, true]);
 });

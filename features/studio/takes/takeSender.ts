@@ -1,11 +1,14 @@
 import { ApiError } from "@/features/api/apiError";
 import { queryClient } from "@/features/api/queryClient";
+import { session } from "@/features/api/session";
 import { forgetUnsent, keepUnsent, unsentOf, type UnsentTake } from "./unsentTakes";
 import { uploadTake } from "./uploadTake";
 
 /** Where a recording is on its way. */
 export interface Sending {
   id: string;
+  /** of the take it was made from; null for an answer */
+  takeId: string | null;
   partId: string;
   title: string;
   bytes: number;
@@ -26,15 +29,35 @@ const timers = new Map<string, ReturnType<typeof setTimeout>>();
 const running = new Set<string>();
 const listeners = new Set<() => void>();
 
+const owner = () => session.current().account?.id ?? null;
+let shownTo = owner();
+
+function tell(): void {
+  for (const listener of [...listeners]) listener();
+}
+
+// Of one person's recordings the next on this device sees and sends nothing; they lie on the device until their owner is back.
+session.subscribe(() => {
+  if (owner() === shownTo) return;
+  shownTo = owner();
+  for (const timer of timers.values()) clearTimeout(timer);
+  for (const all of [timers, kept, tries]) all.clear();
+  shown = [];
+  tell();
+});
+
 function show(id: string, change: Partial<Sending>): void {
   shown = shown.map((one) => (one.id === id ? { ...one, ...change } : one));
-  for (const listener of [...listeners]) listener();
+  tell();
 }
 
 function add(take: UnsentTake): void {
   kept.set(take.id, take);
-  const { id, partId, title, sound } = take;
-  const fresh: Sending = { id, partId, title, bytes: sound.size, sentBytes: 0, state: "sending", message: null };
+  const { id, takeId = null, partId, title, sound } = take;
+  const fresh: Sending = {
+    ...{ id, takeId, partId, title, bytes: sound.size, sentBytes: 0 },
+    ...{ state: "sending", message: null },
+  };
   shown = [...shown.filter((one) => one.id !== id), fresh];
 }
 
@@ -50,7 +73,7 @@ async function alone(id: string, work: () => Promise<void>): Promise<void> {
 
 async function send(id: string): Promise<void> {
   const take = kept.get(id);
-  if (!take || running.has(id)) return;
+  if (!take || running.has(id) || take.accountId !== owner()) return;
   clearTimeout(timers.get(id));
   running.add(id);
   show(id, { state: "sending", message: null });
@@ -63,6 +86,7 @@ async function send(id: string): Promise<void> {
     show(id, { state: "sent", sentBytes: take.sound.size });
     void queryClient.invalidateQueries({ queryKey: ["studio"] });
   } catch (error) {
+    if (take.accountId !== owner()) return;
     const problem = error instanceof ApiError ? error : ApiError.offline();
     if (problem.refused && problem.status !== 423) show(id, { state: "refused", message: problem.message });
     else {
@@ -101,6 +125,7 @@ export const takeSender = {
   /** Goes on with what a reload or a closed tab interrupted. */
   async resume(accountId: string): Promise<void> {
     for (const take of await unsentOf(accountId)) {
+      if (take.accountId !== owner()) return;
       if (kept.has(take.id)) continue;
       add(take);
       void send(take.id);
@@ -113,6 +138,6 @@ export const takeSender = {
     kept.delete(id);
     await forgetUnsent(id);
     shown = shown.filter((one) => one.id !== id);
-    for (const listener of [...listeners]) listener();
+    tell();
   },
 };

@@ -1,6 +1,7 @@
 import type { DetailedError } from "tus-js-client";
 import { ApiError } from "@/features/api/apiError";
 import { http } from "@/features/api/httpClient";
+import { session } from "@/features/api/session";
 import type { Problem } from "@/shared/contract/problem";
 import type { HandIn } from "@/shared/contract/studio/handIn";
 import type { UnsentTake } from "./unsentTakes";
@@ -18,20 +19,35 @@ const mostRounds = 3;
  * @throws ApiError whose `refused` says that repeating does not help
  */
 export async function uploadTake(
-  { partId, request, sound }: Pick<UnsentTake, "partId" | "request" | "sound">,
+  { accountId, partId, request, sound }: Pick<UnsentTake, "accountId" | "partId" | "request" | "sound">,
   onSent: (bytes: number) => void,
 ): Promise<HandIn> {
+  const asOwner = () => {
+    if (session.current().account?.id !== accountId) throw ApiError.offline();
+  };
   for (let round = 0; round < mostRounds; round++) {
+    asOwner();
     const announced = await http.post<HandIn>(`/parts/${partId}/hand-ins`, request);
     if (announced.state === "ready") return announced;
-    await sendBytes(request.id, sound, onSent);
-    const arrived = await http.get<HandIn>(`/hand-ins/${request.id}`);
-    if (arrived.state === "ready") return arrived;
+    try {
+      await sendBytes(request.id, sound, onSent, asOwner);
+      asOwner();
+      const arrived = await http.get<HandIn>(`/hand-ins/${request.id}`);
+      if (arrived.state === "ready") return arrived;
+    } catch (error) {
+      // What paused for long is forgotten on the way: it is announced once more.
+      if (!(error instanceof ApiError) || error.status !== 404) throw error;
+    }
   }
   throw ApiError.offline();
 }
 
-async function sendBytes(id: string, sound: Blob, onSent: (bytes: number) => void): Promise<void> {
+async function sendBytes(
+  id: string,
+  sound: Blob,
+  onSent: (bytes: number) => void,
+  beforeRequest: () => void,
+): Promise<void> {
   const { Upload } = await import("tus-js-client");
   await new Promise<void>((resolve, reject) => {
     const upload = new Upload(sound, {
@@ -41,6 +57,7 @@ async function sendBytes(id: string, sound: Blob, onSent: (bytes: number) => voi
       retryDelays,
       storeFingerprintForResuming: false,
       onBeforeRequest: async (asked) => {
+        beforeRequest();
         const header = await http.authorization();
         if (header !== null) asked.setHeader("Authorization", header);
       },

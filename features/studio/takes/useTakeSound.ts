@@ -15,6 +15,8 @@ export interface TakeSound {
 }
 
 const marginMs = 10_000;
+const hasEnded = (endsAt: number) => Date.now() > endsAt - marginMs;
+const notPlayed = "The recording could not be played here. Try again.";
 
 /** Plays a recording from the storage by a signed link, which is asked for anew when it has ended. */
 export function useTakeSound(handInId: string, durationS: number): TakeSound {
@@ -24,11 +26,34 @@ export function useTakeSound(handInId: string, durationS: number): TakeSound {
   const audio = useRef<HTMLAudioElement | null>(null);
   const endsAt = useRef(0);
   const wanted = useRef(0);
+  /** a try to play runs, and tells itself how it ends */
+  const trying = useRef(false);
+  /** where it was tried anew because it broke off */
+  const triedAnewAt = useRef<number | null>(null);
+  const playAnew = useRef<() => void>(() => undefined);
 
   useEffect(() => {
     const element = new Audio();
     element.preload = "none";
     audio.current = element;
+    const paused = () => {
+      if (trying.current || !element.paused) return;
+      wanted.current = element.currentTime;
+      setState("still");
+    };
+    const broke = () => {
+      if (trying.current) return;
+      const at = element.currentTime;
+      wanted.current = at;
+      endsAt.current = 0;
+      if (triedAnewAt.current === null || at > triedAnewAt.current + 1) {
+        triedAnewAt.current = at;
+        playAnew.current();
+      } else {
+        setState("still");
+        setProblem(notPlayed);
+      }
+    };
     const follow = () => setAtS(element.currentTime);
     const ended = () => {
       setState("still");
@@ -36,6 +61,8 @@ export function useTakeSound(handInId: string, durationS: number): TakeSound {
       setAtS(0);
     };
     element.addEventListener("ended", ended);
+    element.addEventListener("pause", paused);
+    element.addEventListener("error", broke);
     let frame = requestAnimationFrame(function look() {
       frame = requestAnimationFrame(look);
       if (!element.paused) follow();
@@ -43,6 +70,8 @@ export function useTakeSound(handInId: string, durationS: number): TakeSound {
     return () => {
       cancelAnimationFrame(frame);
       element.removeEventListener("ended", ended);
+      element.removeEventListener("pause", paused);
+      element.removeEventListener("error", broke);
       element.pause();
       element.removeAttribute("src");
       element.load();
@@ -54,8 +83,9 @@ export function useTakeSound(handInId: string, durationS: number): TakeSound {
     if (!element) return;
     setProblem(null);
     setState("loading");
+    trying.current = true;
     try {
-      if (Date.now() > endsAt.current - marginMs) {
+      if (hasEnded(endsAt.current)) {
         const { url, expiresAt } = await http.get<SoundLink>(`/hand-ins/${handInId}/sound`);
         endsAt.current = Date.parse(expiresAt);
         element.src = url;
@@ -66,9 +96,14 @@ export function useTakeSound(handInId: string, durationS: number): TakeSound {
     } catch (error) {
       endsAt.current = 0;
       setState("still");
-      setProblem(error instanceof ApiError ? error.message : "The recording could not be played here. Try again.");
+      setProblem(error instanceof ApiError ? error.message : notPlayed);
+    } finally {
+      trying.current = false;
     }
   }, [handInId]);
+  useEffect(() => {
+    playAnew.current = () => void play();
+  }, [play]);
   const pause = useCallback(() => {
     const element = audio.current;
     if (!element) return;
@@ -81,9 +116,17 @@ export function useTakeSound(handInId: string, durationS: number): TakeSound {
       const at = Math.min(durationS, Math.max(0, to));
       wanted.current = at;
       setAtS(at);
-      if (audio.current && audio.current.readyState > 0) audio.current.currentTime = at;
+      const element = audio.current;
+      if (!element || element.readyState === 0) return;
+      if (!hasEnded(endsAt.current)) element.currentTime = at;
+      // One that is still gets its new link when it is played.
+      else if (!element.paused) void play();
     },
-    [durationS],
+    [durationS, play],
   );
-  return { state, atS, problem, play: () => void play(), pause, seek };
+  const begin = () => {
+    triedAnewAt.current = null;
+    void play();
+  };
+  return { state, atS, problem, play: begin, pause, seek };
 }

@@ -42,3 +42,4 @@ export const memberWaitsForGuardian = waitsSql("m", "u");
 export const personNeedsGuardian = needsGuardianSql("u");
 /** The same for what somebody `told` wants to tell. */
 export const toldNeedsGuardian = needsGuardianSql("told");
+export const toldShares = sharesSql("m", "told");

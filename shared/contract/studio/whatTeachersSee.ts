@@ -9,5 +9,5 @@ export const whatTeachersSee = (recordingsKeptDays: number): string[] => [
   "The takes you hand in: the sound, what was measured in it and how it felt; nothing you sing without handing it in.",
   "What you write to your teachers.",
   `Recordings are deleted ${recordingsKeptDays === 1 ? "one day" : `${recordingsKeptDays} days`} after you hand them in.`,
-  "Other pupils see nothing of this. You can take your word back at any time; from that moment your teachers see only your name.",
+  "Other pupils see nothing of this. You can take your word back at any time; from that moment your teachers see only your name, and recordings you handed in are deleted.",
 ];

@@ -1,4 +1,4 @@
-import { daysUntil, distanceInDays, dueWords, isDay } from "./dayWords";
+import { daysUntil, distanceInDays, dueWords } from "./dayWords";
 import { inOrderOfWork, partDue } from "./partWords";
 
 const now = new Date(2026, 10, 24, 23, 30);
@@ -14,10 +14,6 @@ it("says when something is due, and that it is overdue", () => {
   expect(dueWords("2026-12-10", now)).toBe("due Thu 10 Dec");
   expect(dueWords("2026-11-20", now)).toBe("overdue since Fri 20 Nov");
   expect(partDue("accepted", "2026-11-20", now)).toBeNull();
-});
-
-it("knows a day of the calendar from what is none", () => {
-  expect(["2026-12-10", "2026-02-30", "10.12.2026", ""].map(isDay)).toEqual([true, false, false, false]);
 });
 
 it("puts what is to be sung first by its day, what is handed in after it, and what is accepted last", () => {

@@ -37,10 +37,3 @@ export function dueWords(day: string, now: Date): string {
   if (days < 0) return `overdue since ${shortDay(day, now)}`;
   return days <= 1 ? `due ${distanceInDays(days)}` : `due ${shortDay(day, now)}`;
 }
-
-/** Whether what was typed is a day of the calendar: "2026-12-10". */
-export function isDay(text: string): boolean {
-  if (!/^\d{4}-\d{2}-\d{2}$/.test(text)) return false;
-  const day = new Date(`${text}T12:00:00Z`);
-  return !Number.isNaN(day.getTime()) && day.toISOString().startsWith(text);
-}

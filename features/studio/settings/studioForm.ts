@@ -1,5 +1,4 @@
 import type { Studio, StudioChange } from "@/shared/contract/studio/studio";
-import { isDay } from "../dayWords";
 
 /** What is typed about a studio. */
 export interface StudioDraft {

@@ -60,7 +60,8 @@ it("goes with a pupil's account: membership, parts, words, a guardian's address 
   const { person, memberId } = await pupilIn(server, studioId);
   const made = await give(teacher, studioId, [memberId]);
   await person.post(`/api/parts/${made.parts[0]!.id}/comments`, { text: "Secret." }).expect(201);
-  await person.put("/api/account/person", { birthYear: new Date().getUTCFullYear() - 12, country: null }).expect(200);
+  const young = { birthYear: new Date().getUTCFullYear() - 12, country: null, endsSharing: true };
+  await person.put("/api/account/person", young).expect(200);
   const email = "guardian-of-lowri@orlow-quay.example";
   await person.post("/api/guardian", { email }).expect(202);
   expect((await mailTo(server, email)).token).not.toBe("");

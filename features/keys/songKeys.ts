@@ -32,7 +32,7 @@ export function songSequence(song: Pick<Song, "chart">): string[] {
 }
 
 /** A song as others are given it: its key, its chords, and the same as they are played; null without a key. */
-export function songPiece(song: Song) {
+export function songPiece<Given extends Pick<Song, "chart" | "writtenKey" | "tune">>(song: Given) {
   const written = writtenKeyOf(song);
   return written && { song, written, chords: songChords(song), sequence: songSequence(song) };
 }

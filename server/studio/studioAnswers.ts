@@ -1,3 +1,4 @@
+import { HttpProblem } from "../http/httpProblem";
 import { idIn } from "../http/ownedCollection.router";
 
 /** Answers that many routes of a studio give, as the API's description words them. */
@@ -6,5 +7,8 @@ export const teachersOnly = { description: "Only for teachers of the studio (tea
 export const ownerOnly = { description: "Only for the owner of the studio (owner-only)." };
 export const tooMany = { description: "Tried too often (too-many-tries); Retry-After tells the seconds to wait." };
 export const linkOver = { description: "The link is used up, too old, or taken back (link-not-valid)." };
+
+/** Of ids that whoever sends makes. */
+export const idTaken = () => new HttpProblem(409, "conflict", "Something else was sent by this id before.");
 
 export const studioIdIn = (params: Record<string, string>) => idIn(params, "id", "studio");

@@ -1,6 +1,7 @@
 import { useQuery } from "@tanstack/react-query";
 import { useCallback, useMemo, useState } from "react";
 import { http } from "@/features/api/httpClient";
+import { useSentId } from "@/features/api/useSentId";
 import type { Assignment, AssignmentRequest } from "@/shared/contract/studio/assignment";
 import type { RosterRow } from "@/shared/contract/studio/roster";
 import type { Instrument } from "@/shared/instruments/instrument";
@@ -62,6 +63,7 @@ export function useAssignment({ studioId, piece, pupils, asked, group, instrumen
   const send = useStudioChange((request: AssignmentRequest) =>
     http.post<Assignment>(`/studios/${studioId}/assignments`, request),
   );
+  const { idFor } = useSentId();
   const chosen = parts.filter(({ draft }) => draft.chosen);
   return {
     parts,
@@ -76,15 +78,12 @@ export function useAssignment({ studioId, piece, pupils, asked, group, instrumen
       : question === null
         ? "Nothing is known of the tune, so no voice can be held against it. Add its notes or its lowest and highest note to the song, or choose the keys yourself."
         : null,
-    give: ({ dueOn, note, waysOf }: Given, done: (assignmentId: string) => void) =>
-      send.mutate(
-        {
-          songId: piece.song.id,
-          dueOn,
-          note,
-          parts: chosen.map((part) => partRequest(part, waysOf(part.row.memberId))),
-        },
-        { onSuccess: ({ id }) => done(id) },
-      ),
+    give: ({ dueOn, note, waysOf }: Given, done: (assignmentId: string) => void) => {
+      const request = {
+        ...{ songId: piece.song.id, dueOn, note },
+        parts: chosen.map((part) => partRequest(part, waysOf(part.row.memberId))),
+      };
+      send.mutate({ id: idFor(request), ...request }, { onSuccess: ({ id }) => done(id) });
+    },
   };
 }

@@ -1,6 +1,8 @@
 import { useState } from "react";
 import { View } from "react-native";
+import { ApiError } from "@/features/api/apiError";
 import { http } from "@/features/api/httpClient";
+import { useSentId } from "@/features/api/useSentId";
 import { Button } from "@/features/ui/Button";
 import { Card } from "@/features/ui/Card";
 import { Field } from "@/features/ui/Field";
@@ -8,7 +10,7 @@ import { Heading } from "@/features/ui/Heading";
 import { Notice } from "@/features/ui/Notice";
 import { Text } from "@/features/ui/Text";
 import type { Part } from "@/shared/contract/studio/assignment";
-import { useStudioChange } from "../studioQueries";
+import { useStudioChange, useStudioRefresh } from "../studioQueries";
 
 type Answer = "accepted" | "returned";
 
@@ -20,11 +22,22 @@ const done: Record<Answer, string> = {
 /** The teacher's answer to what was handed in; the pupil gets a mail. */
 export function AnswerCard({ part }: { part: Part }) {
   const [message, setMessage] = useState("");
+  const { idFor, answered: sent } = useSentId();
+  const refresh = useStudioRefresh();
   const answer = useStudioChange(async (state: Answer) => {
     const words = message.trim();
-    const changed = await http.put<Part>(`/parts/${part.id}`, { state, ...(words === "" ? null : { message: words }) });
+    try {
+      await http.put<Part>(`/parts/${part.id}`, {
+        ...{ state, seenTakeAt: part.lastTake?.at ?? null },
+        ...(words === "" ? null : { message: words, messageId: idFor({ words }) }),
+      });
+    } catch (error) {
+      // The take that was not heard yet comes into sight.
+      if (error instanceof ApiError && error.code === "newer-take") await refresh();
+      throw error;
+    }
+    sent();
     setMessage("");
-    return changed;
   });
   const answered = part.state === "accepted" || part.state === "returned" ? part.state : null;
   return (

@@ -1,5 +1,6 @@
 import { View } from "react-native";
 import { http } from "@/features/api/httpClient";
+import { useSentId } from "@/features/api/useSentId";
 import { useServerForm } from "@/features/api/useServerForm";
 import { Button } from "@/features/ui/Button";
 import { Form } from "@/features/ui/Form";
@@ -20,12 +21,11 @@ export interface CommentFormProps {
 /** Writes into the thread, or at a time in a take. */
 export function CommentForm({ partId, time, onTime }: CommentFormProps) {
   const refresh = useStudioRefresh();
+  const { idFor, answered } = useSentId();
   const { form, end, submit } = useServerForm({ text: "" }, async ({ text }) => {
-    await http.post(`/parts/${partId}/comments`, {
-      text: text.trim(),
-      handInId: time?.handInId ?? null,
-      atS: time?.atS ?? null,
-    });
+    const words = { text: text.trim(), handInId: time?.handInId ?? null, atS: time?.atS ?? null };
+    await http.post(`/parts/${partId}/comments`, { id: idFor(words), ...words });
+    answered();
     form.reset({ text: "" });
     onTime(null);
     await refresh();

@@ -65,16 +65,21 @@ it("puts what is written at a time into the take, and lets the time go afterward
   fireEvent.change(screen.getByTestId("comment-text"), { target: { value: "Softer." } });
   fireEvent.click(screen.getByTestId("send-comment"));
   await waitFor(() => expect(screen.getByTestId("comment-time").textContent).toBe(""));
-  expect(server.bodiesOf(`POST /parts/${id}/comments`)).toEqual([{ text: "Softer.", handInId, atS: 61 }]);
+  expect(server.bodiesOf(`POST /parts/${id}/comments`)).toEqual([
+    { id: expect.any(String), text: "Softer.", handInId, atS: 61 },
+  ]);
 });
 
 it("answers what was handed in with words, and nothing that was not", async () => {
-  const { id } = open({ state: "handed-in" });
+  const seenTakeAt = "2026-11-24T18:00:00.000Z";
+  const { id } = open({ state: "handed-in", lastTake: { at: seenTakeAt, effort: 3 } });
   server.to(`PUT /parts/${id}`, aPart({ state: "returned" }));
   fireEvent.change(await screen.findByTestId("answer-message"), { target: { value: "Once more, lighter." } });
   fireEvent.click(screen.getByTestId("return"));
   await waitFor(() =>
-    expect(server.bodiesOf(`PUT /parts/${id}`)).toEqual([{ state: "returned", message: "Once more, lighter." }]),
+    expect(server.bodiesOf(`PUT /parts/${id}`)).toEqual([
+      { state: "returned", seenTakeAt, message: "Once more, lighter.", messageId: expect.any(String) },
+    ]),
   );
 });
 
@@ -82,6 +87,26 @@ it("has no answer to give before anything is handed in", async () => {
   open({ state: "assigned" });
   await screen.findByTestId("comments");
   expect(screen.queryByTestId("answer")).toBeNull();
+});
+
+it("sends words again under the id they had, and the next words under another", async () => {
+  const { id } = open({});
+  const path = `POST /parts/${id}/comments`;
+  server.to(path, { code: "unavailable", message: "Try again." }, 503);
+  const say = async (text: string, times: number) => {
+    fireEvent.change(await screen.findByTestId("comment-text"), { target: { value: text } });
+    fireEvent.click(screen.getByTestId("send-comment"));
+    await waitFor(() => expect(server.bodiesOf(path)).toHaveLength(times));
+    await waitFor(() => expect(screen.getByTestId("send-comment").getAttribute("aria-busy")).not.toBe("true"));
+  };
+  await say("Softer.", 1);
+  server.to(path, remark, 201);
+  await say("Softer.", 2);
+  await waitFor(() => expect(screen.getByTestId<HTMLTextAreaElement>("comment-text").value).toBe(""));
+  await say("Softer.", 3);
+  const [first, again, more] = (server.bodiesOf(path) as { id: string }[]).map((body) => body.id);
+  expect(again).toBe(first);
+  expect(more).not.toBe(first);
 });
 
 it("keeps what was written when the answer does not arrive", async () => {

@@ -45,13 +45,17 @@ export function assignmentsRoutes(api: Api, { assignments }: StudioParts): void 
       ...common,
       method: "post",
       path: "/studios/:id/assignments",
-      summary: "Give a song of one's shelf to many, each in their own key: each gets a copy, a decided key and a mail",
+      summary:
+        "Give a song of one's shelf to many, each in their own key: each gets a copy, a decided key and a mail. May be repeated by its id",
       body: { name: "AssignmentRequest", schema: assignmentRequest },
       answers: {
         201: { description: "Given.", schema: assignmentSchema },
         403: teachersOnly,
         404: { description: "There is no such studio, or no such song on the asker's shelf (not-found)." },
-        409: { description: "The studio, or a pupil's shelf, holds as much as it may (collection-full)." },
+        409: {
+          description:
+            "The studio, or a pupil's shelf, holds as much as it may (collection-full), or the id is taken (conflict).",
+        },
       },
     },
     async (req, res) => {

@@ -14,6 +14,7 @@ import { enqueueMail } from "../../mail/mail.service";
 import { songsOf } from "../../songs/songs.service";
 import { memberShares } from "../consent/digitalConsent";
 import { wakeDeletion } from "../handIns/takeDeletion";
+import { idTaken } from "../studioAnswers";
 import type { StudioAccessService } from "../studioAccess.service";
 import { AssignmentEntity } from "./assignment.entity";
 import { AssignmentPartEntity } from "./assignmentPart.entity";
@@ -87,21 +88,24 @@ export class AssignmentsService {
     return { ...row, assignedAt: row.assignedAt.toISOString(), parts: parts.map(shownPart) };
   }
 
-  /** Each gets a copy, a decided key and a mail, all of them or nobody. */
+  /** Each gets a copy, a decided key and a mail, all of them or nobody; once, however often it is sent by the same id. */
   async give(userId: string, studioId: string, request: AssignmentRequest): Promise<Assignment> {
     const { memberId: assignedBy, name: teacher } = await this.access.teacher(userId, studioId);
+    const id = request.id ?? randomUUID();
+    const given = { id, studioId, assignedBy };
+    if (await isGiven(this.dataSource.manager, given)) return this.get(userId, studioId, id);
     const { title, chart, writtenKey, tune, beatsPerBar, tempo } = await this.songs.get(userId, request.songId);
     const song: GivenSong = { title, chart, writtenKey, tune, beatsPerBar, tempo };
-    const id = randomUUID();
     await this.dataSource.transaction(async (manager) => {
       const [studio]: { name: string }[] = await manager.query(
         "SELECT name FROM studios WHERE id = $1 FOR NO KEY UPDATE",
         [studioId],
       );
+      if (await isGiven(manager, given)) return;
       if ((await manager.countBy(AssignmentEntity, { studioId })) >= mostAssignments)
         throw new HttpProblem(409, "collection-full", `A studio keeps at most ${mostAssignments} assignments.`);
       const { dueOn, note } = request;
-      await manager.insert(AssignmentEntity, { id, studioId, assignedBy, song, dueOn, note });
+      await manager.insert(AssignmentEntity, { ...given, song, dueOn, note });
       const studioName = studio?.name ?? "";
       const pupils = await pupilsOf(manager, studioId, request);
       const keys = pupils.map(({ userId: person, part }) => {
@@ -159,6 +163,16 @@ export class AssignmentsService {
       await wakeDeletion(manager);
     });
   }
+}
+
+/** The same was given before; of somebody else's the id is taken. */
+async function isGiven(
+  manager: EntityManager,
+  { id, ...given }: Pick<AssignmentEntity, "id" | "studioId" | "assignedBy">,
+): Promise<boolean> {
+  const kept = await manager.findOneBy(AssignmentEntity, { id });
+  if (kept && (kept.studioId !== given.studioId || kept.assignedBy !== given.assignedBy)) throw idTaken();
+  return kept !== null;
 }
 
 /** Those who are to get it, ordered by account: two assignments at once lock people in the same order. */

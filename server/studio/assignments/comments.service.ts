@@ -2,6 +2,7 @@ import { randomUUID } from "node:crypto";
 import type { DataSource, EntityManager } from "typeorm";
 import type { Comment, CommentRequest } from "../../../shared/contract/studio/assignment";
 import { HttpProblem, notFound } from "../../http/httpProblem";
+import { idTaken } from "../studioAnswers";
 import { CommentEntity } from "./comment.entity";
 import { type PartAccess, type PartAccessService, refuseHidden, refuseUnshared } from "./partAccess.service";
 
@@ -43,11 +44,15 @@ export class CommentsService {
     });
   }
 
+  /** Once, however often it is sent by the same id. */
   async write(
     manager: EntityManager,
     { partId, me }: PartAccess,
-    { text, handInId = null, atS = null }: Pick<CommentRequest, "text"> & Partial<CommentRequest>,
+    { id = randomUUID(), text, handInId = null, atS = null }: Pick<CommentRequest, "text"> & Partial<CommentRequest>,
   ): Promise<Comment> {
+    const kept = await manager.findOneBy(CommentEntity, { id });
+    if (kept && (kept.partId !== partId || kept.authorId !== me.memberId)) throw idTaken();
+    if (kept) return { ...commentOf(kept), author: me, mine: true };
     if (handInId !== null) {
       const takes: object[] = await manager.query("SELECT FROM hand_ins WHERE id = $1 AND part_id = $2", [
         handInId,
@@ -60,10 +65,9 @@ export class CommentsService {
     }
     if ((await manager.countBy(CommentEntity, { partId })) >= mostComments)
       throw new HttpProblem(409, "collection-full", `A thread holds at most ${mostComments} comments.`);
-    const id = randomUUID();
     const createdAt = new Date();
     await manager.insert(CommentEntity, { id, partId, authorId: me.memberId, handInId, atS, text, createdAt });
-    return { id, handInId, atS, text, author: me, mine: true, createdAt: createdAt.toISOString() };
+    return { ...commentOf({ id, handInId, atS, text, createdAt }), author: me, mine: true };
   }
 
   /** Only what one wrote oneself. */
@@ -73,3 +77,10 @@ export class CommentsService {
     if (!affected) throw notFound("comment");
   }
 }
+
+type Written = Pick<CommentEntity, "id" | "handInId" | "atS" | "text" | "createdAt">;
+
+const commentOf = ({ id, handInId, atS, text, createdAt }: Written) => ({
+  ...{ id, handInId, atS, text },
+  createdAt: createdAt.toISOString(),
+});

@@ -53,6 +53,7 @@ export function partsRoutes(api: Api, { parts, comments }: StudioParts): void {
         200: { description: "Saved.", schema: partSchema },
         403: { description: "Not a teacher there (teachers-only), or the pupil does not agree (not-agreed)." },
         404: missing,
+        409: { description: "A take was handed in after the one that was seen (newer-take)." },
       },
     },
     async (req, res) => {
@@ -83,13 +84,13 @@ export function partsRoutes(api: Api, { parts, comments }: StudioParts): void {
       ...common,
       method: "post",
       path: "/parts/:id/comments",
-      summary: "Write into the thread; with a take and a time, if the words stand there",
+      summary: "Write into the thread; with a take and a time, if the words stand there. May be repeated by its id",
       body: { name: "CommentRequest", schema: commentRequest },
       answers: {
         201: { description: "Written.", schema: commentSchema },
         403: notAgreed,
         404: missing,
-        409: { description: "The thread holds as much as it may (collection-full)." },
+        409: { description: "The thread holds as much as it may (collection-full), or the id is taken (conflict)." },
       },
     },
     async (req, res) => {

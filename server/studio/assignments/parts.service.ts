@@ -1,6 +1,6 @@
 import type { DataSource, EntityManager } from "typeorm";
 import type { Part, PartChange, PartListing } from "../../../shared/contract/studio/assignment";
-import { notFound } from "../../http/httpProblem";
+import { HttpProblem, notFound } from "../../http/httpProblem";
 import { enqueueMail } from "../../mail/mail.service";
 import { keptDaysColumn } from "../consent/memberConsent";
 import type { CommentsService } from "./comments.service";
@@ -62,14 +62,18 @@ export class PartsService {
     return shares ? seen : { ...seen, instrument: null, way: null, state: "assigned", lastTake: null };
   }
 
-  /** Another key or way, which becomes the pupil's decision too; or the answer to what was handed in. */
+  /** Another key or way, which becomes the pupil's decision too; or the answer to what was handed in, once for each take. */
   async change(userId: string, partId: string, wanted: PartChange): Promise<Part> {
     await this.dataSource.transaction(async (manager) => {
       const access = await this.access.reachAsTeacher(userId, partId, manager);
       if (wanted.state !== undefined || wanted.message !== undefined) refuseHidden(access);
       await this.rekey(manager, access, wanted);
-      if (wanted.message !== undefined) await this.comments.write(manager, access, { text: wanted.message });
-      if (wanted.state !== undefined) await this.answer(manager, access, wanted.state, wanted.message ?? null);
+      const { state, message, messageId, seenTakeAt } = wanted;
+      // The row is locked by now: no take comes in between what is compared here and the answer.
+      if (state !== undefined) await refuseUnheard(manager, partId, seenTakeAt ?? null);
+      if (message !== undefined)
+        await this.comments.write(manager, access, { text: message, ...(messageId ? { id: messageId } : null) });
+      if (state !== undefined) await this.answer(manager, access, state, message ?? null);
     });
     return this.get(userId, partId);
   }
@@ -103,12 +107,13 @@ export class PartsService {
     state: "accepted" | "returned",
     note: string | null,
   ): Promise<void> {
-    const [rows]: [{ at: Date }[], number] = await manager.query(
-      "UPDATE assignment_parts SET state = $2, answered_at = clock_timestamp() WHERE id = $1 RETURNING answered_at AS at",
+    const [rows]: [{ takeAt: Date | null }[], number] = await manager.query(
+      `UPDATE assignment_parts SET state = $2, answered_at = clock_timestamp() WHERE id = $1
+       RETURNING handed_in_at AS "takeAt"`,
       [partId, state],
     );
     await enqueueMail(manager, {
-      event: `answered:${partId}:${rows[0]?.at.getTime()}`,
+      event: `answered:${partId}:${rows[0]?.takeAt?.getTime() ?? "none"}:${state}`,
       kind: "answered",
       to: pupil.email,
       userId: pupil.userId,
@@ -116,4 +121,15 @@ export class PartsService {
       path: `/studio/parts/${partId}`,
     });
   }
+}
+
+/** Times are told in milliseconds and kept more finely. */
+async function refuseUnheard(manager: EntityManager, partId: string, seenTakeAt: string | null): Promise<void> {
+  const newer: object[] = await manager.query(
+    `SELECT FROM assignment_parts
+     WHERE id = $1 AND date_trunc('milliseconds', handed_in_at) > coalesce($2::timestamptz, '-infinity')`,
+    [partId, seenTakeAt],
+  );
+  if (newer.length > 0)
+    throw new HttpProblem(409, "newer-take", "A newer take was handed in. Listen to it first, then answer.");
 }

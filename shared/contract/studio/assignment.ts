@@ -28,8 +28,15 @@ const partKey = {
   way: decision.shape.way,
 };
 
+/**
+ * Made by whoever sends, so that what was sent can be sent again when its answer was lost: what is there by this id is
+ * the answer then. The server makes one where none is given.
+ */
+const sentId = z.uuid().exactOptional();
+
 /** A song for many at once, for each in their own key. */
 export const assignmentRequest = z.strictObject({
+  id: sentId,
   /** of the teacher's own shelf */
   songId: z.uuid(),
   dueOn: day.nullable(),
@@ -137,10 +144,14 @@ export const partChange = z.strictObject({
   instrument: playedOn.nullable().exactOptional(),
   way: decision.shape.way.exactOptional(),
   partNote: words.exactOptional(),
-  /** the answer; the pupil gets a mail */
+  /** the answer; the pupil gets one mail for it */
   state: partState.extract(["returned", "accepted"]).exactOptional(),
+  /** `lastTake.at` as the teacher saw it, null where none was there: with an answer, so that none is given to a take nobody heard */
+  seenTakeAt: z.iso.datetime().nullable().exactOptional(),
   /** words that go with the answer: a comment in the thread, and quoted in the mail */
   message: words.min(1).exactOptional(),
+  /** of the comment that the message becomes */
+  messageId: sentId,
 });
 export type PartChange = z.infer<typeof partChange>;
 
@@ -159,6 +170,7 @@ export type Comment = z.infer<typeof comment>;
 
 /** What is written into a thread. */
 export const commentRequest = z.strictObject({
+  id: sentId,
   text: words.min(1, "Write something."),
   handInId: z.uuid().nullable().default(null),
   atS: comment.shape.atS.default(null),

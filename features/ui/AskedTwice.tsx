@@ -1,9 +1,7 @@
-import { useEffect, useRef, useState, type ReactNode } from "react";
-import { View } from "react-native";
+import { useRef, useState, type ReactNode } from "react";
 import { Button } from "./Button";
 import type { IconName } from "./Icon";
-import { Notice } from "./Notice";
-import { Text } from "./Text";
+import { Question } from "./Question";
 
 export interface AskedTwiceProps {
   /** on the button that asks: "Delete the song" */
@@ -47,18 +45,11 @@ export function AskedTwice({
   testID,
 }: AskedTwiceProps) {
   const [asked, setAsked] = useState(false);
-  const group = useRef<HTMLDivElement>(null);
   const opener = useRef<HTMLDivElement>(null);
   const keep = () => {
     setAsked(false);
     requestAnimationFrame(() => opener.current?.querySelector<HTMLElement>("button, [role=switch]")?.focus());
   };
-  useEffect(() => {
-    if (!asked) return;
-    group.current?.focus({ preventScroll: true });
-    // The foot of the phone stands over the end of the page: in the middle the whole question is seen.
-    group.current?.scrollIntoView({ block: "center" });
-  }, [asked]);
   if (!asked)
     return (
       <div ref={opener}>
@@ -78,19 +69,10 @@ export function AskedTwice({
       </div>
     );
   return (
-    <div ref={group} role="group" aria-label={question} tabIndex={-1}>
-      <Notice kind="caution" title={question} testID="remove-asked">
-        <Text variant="small">{text}</Text>
-        {error && (
-          <Text variant="small" tone="brick">
-            {`${failed} ${error.message}`}
-          </Text>
-        )}
-        <View style={{ flexDirection: "row", flexWrap: "wrap", gap: 8, marginTop: 8 }}>
-          <Button small label={confirmLabel} busy={busy} onPress={onRemove} testID="remove-confirmed" />
-          <Button kind="secondary" small label={keepLabel} onPress={keep} />
-        </View>
-      </Notice>
-    </div>
+    <Question
+      {...{ question, text, failed, confirmLabel, keepLabel, busy, error }}
+      onConfirm={onRemove}
+      onKeep={keep}
+    />
   );
 }

@@ -2,7 +2,7 @@ import type { DataSource } from "typeorm";
 
 const columnsOf = {
   "memberships.json": `SELECT s.name AS studio, m.role, m.name, m.joined_at, m.left_at, m.consent_given_at,
-      m.consent_withdrawn_at, m.guardian_agreed_at
+      m.consent_withdrawn_at, m.guardian_agreed_at, m.guardian_refused_at, m.recordings_kept_days
     FROM studio_members m JOIN studios s ON s.id = m.studio_id WHERE m.user_id = $1 ORDER BY m.joined_at`,
   "guardian.json": "SELECT email, asked_at, confirmed_at, withdrawn_at FROM guardians WHERE user_id = $1",
   "parts.json": `SELECT p.id, s.name AS studio, a.song->>'title' AS title, a.due_on::text, a.note, p.tonic, p.shift,
@@ -21,7 +21,7 @@ const columnsOf = {
     FROM studio_invites i JOIN studio_members m ON m.id = i.invited_by WHERE m.user_id = $1 ORDER BY i.sent_at`,
 } as const;
 
-/** What studios keep of a person, for the export: what is theirs, and of others only what they wrote to them. */
+/** What studios keep of a person, for the export: what they are in, were given, gave and wrote; of others only whom they invited. */
 export async function studioDataOf(dataSource: DataSource, userId: string): Promise<Record<string, unknown>> {
   const files = Object.entries(columnsOf).map(
     async ([file, sql]) => [file, await dataSource.query(sql, [userId])] as const,

@@ -185,6 +185,39 @@ it("is the teachers' business: co-teachers invite pupils, the owner co-teachers,
   await outsider.post(`/api/studios/${elsewhere}/invites/${id}/resend`).expect(404);
 });
 
+it("leaves an invitation to teach to the owner: a colleague neither sends it again, takes it back nor makes it a pupil's", async () => {
+  const colleague = await confirmedPerson(server);
+  await join(server, studioId, colleague, { role: "co-teacher", name: "Hob Carrow" });
+  const { id, email, token } = await invited(anAddress(), { role: "co-teacher" });
+  const refused = [
+    colleague.post(`${again(id)}/resend`),
+    colleague.delete(again(id)),
+    colleague.post(`/api/studios/${studioId}/invites`, { emails: [anAddress(), email.toUpperCase()] }),
+  ];
+  for (const asked of refused) expect((await asked.expect(403)).body.code).toBe("owner-only");
+  expect((await look(token).expect(200)).body.role).toBe("co-teacher");
+  expect((await teacher.get(`/api/studios/${studioId}/invites`).expect(200)).body).toHaveLength(1);
+  await teacher.delete(again(id)).expect(204);
+});
+
+it("once expired, it fills no place of those that are open, and can be taken back", async () => {
+  await server.database.query(
+    `INSERT INTO studio_invites (studio_id, email, role, expires_at)
+     SELECT $1, n || '@orlow-quay.example', 'pupil', now() - interval '1 minute' FROM generate_series(1, 500) n`,
+    [studioId],
+  );
+  const { id } = await invited();
+  const [open, ...expired] = (await teacher.get(`/api/studios/${studioId}/invites`).expect(200)).body as Invite[];
+  expect([open?.id, expired.length, expired[0]?.state]).toEqual([id, 500, "expired"]);
+  await teacher.delete(again(expired[0]!.id)).expect(204);
+  await server.database.query(
+    "UPDATE studio_invites SET expires_at = now() + interval '1 day' WHERE studio_id = $1 AND revoked_at IS NULL",
+    [studioId],
+  );
+  const more = { emails: [anAddress()] };
+  expect((await teacher.post(`/api/studios/${studioId}/invites`, more).expect(409)).body.code).toBe("collection-full");
+});
+
 it("makes a co-teacher's account a teacher's", async () => {
   const { token } = await invited(anAddress(), { role: "co-teacher" });
   const person = await Person.put(server, "singer", true);

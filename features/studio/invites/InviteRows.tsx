@@ -10,8 +10,16 @@ import { useStudioChange } from "../studioQueries";
 
 const rank: Record<Invite["state"], number> = { open: 0, expired: 1, accepted: 2, revoked: 3 };
 
+interface InviteRowsProps {
+  studioId: string;
+  invites: readonly Invite[];
+  /** those who are to teach are invited by the owner only */
+  owner: boolean;
+  now: Date;
+}
+
 /** Those who were invited: open invitations first, each can be sent again or taken back. */
-export function InviteRows({ studioId, invites, now }: { studioId: string; invites: readonly Invite[]; now: Date }) {
+export function InviteRows({ studioId, invites, owner, now }: InviteRowsProps) {
   const shown = [...invites].sort((a, b) => rank[a.state] - rank[b.state] || b.sentAt.localeCompare(a.sentAt));
   if (shown.length === 0)
     return (
@@ -27,7 +35,7 @@ export function InviteRows({ studioId, invites, now }: { studioId: string; invit
           role="listitem"
           style={{ borderTopWidth: 1, borderColor: colors.line, paddingVertical: 8 }}
         >
-          <InviteRow studioId={studioId} invite={invite} now={now} />
+          <InviteRow studioId={studioId} invite={invite} mayChange={owner || invite.role === "pupil"} now={now} />
         </View>
       ))}
     </View>
@@ -41,7 +49,14 @@ function stateOf({ state, expiresAt, sentAt, role }: Invite, now: Date): string 
   return state === "accepted" ? `${as}joined` : `${as}taken back`;
 }
 
-function InviteRow({ studioId, invite, now }: { studioId: string; invite: Invite; now: Date }) {
+interface InviteRowProps {
+  studioId: string;
+  invite: Invite;
+  mayChange: boolean;
+  now: Date;
+}
+
+function InviteRow({ studioId, invite, mayChange, now }: InviteRowProps) {
   const path = `/studios/${studioId}/invites/${invite.id}`;
   const again = useStudioChange(() => http.post(`${path}/resend`));
   const revoke = useStudioChange(() => http.delete(path));
@@ -54,7 +69,7 @@ function InviteRow({ studioId, invite, now }: { studioId: string; invite: Invite
       <Text variant="small" tone={invite.state === "accepted" ? "lagoon" : "soft"}>
         {stateOf(invite, now)}
       </Text>
-      {(invite.state === "open" || invite.state === "expired") && (
+      {mayChange && (invite.state === "open" || invite.state === "expired") && (
         <View style={{ flexDirection: "row", flexWrap: "wrap", marginLeft: -8, columnGap: 4 }}>
           <Button
             kind="text"
@@ -65,17 +80,15 @@ function InviteRow({ studioId, invite, now }: { studioId: string; invite: Invite
             onPress={() => again.mutate()}
             testID="resend"
           />
-          {invite.state === "open" && (
-            <Button
-              kind="text"
-              small
-              label="Take back"
-              accessibleName={`Take back: ${invite.email}`}
-              busy={revoke.isPending}
-              onPress={() => revoke.mutate()}
-              testID="revoke"
-            />
-          )}
+          <Button
+            kind="text"
+            small
+            label="Take back"
+            accessibleName={`Take back: ${invite.email}`}
+            busy={revoke.isPending}
+            onPress={() => revoke.mutate()}
+            testID="revoke"
+          />
         </View>
       )}
       {error && <Notice kind="error">{error.message}</Notice>}

@@ -42,7 +42,9 @@ export function InviteScreen({ studio, now }: { studio: Studio; now: Date }) {
       <View style={column}>
         <Heading level={2}>Invited</Heading>
         <QueryState query={query} title="The invitations could not be listed">
-          {(invites) => <InviteRows studioId={studio.id} invites={invites} now={now} />}
+          {(invites) => (
+            <InviteRows studioId={studio.id} invites={invites} owner={studio.me.role === "owner"} now={now} />
+          )}
         </QueryState>
       </View>
     </View>

@@ -19,6 +19,15 @@ const look = {
   ...{ email: "maren@orlow.example", sees: ["Your name in this studio.", "The takes you hand in."] },
   ...{ recordingsKeptDays: 90, expiresAt: "2026-12-08T18:00:00.000Z" },
 };
+const unasked = {
+  needed: true,
+  age: 16,
+  email: null,
+  askedAt: null,
+  confirmedAt: null,
+  withdrawnAt: null,
+  refusedAt: null,
+};
 let server: Answers;
 
 beforeEach(() => {
@@ -91,6 +100,7 @@ it("asks for the year of birth where one agrees, then joins with what was chosen
 
 it("asks those who are too young for a guardian's address, and says that nothing is shared until then", async () => {
   server.to("POST /invites/accept", asPupil({ shares: false, waitsForGuardian: true })).to("POST /guardian", {}, 202);
+  server.to("GET /guardian", unasked);
   await open();
   await screen.findByTestId("join-name");
   type("join-name", "Cass Wether");
@@ -103,6 +113,20 @@ it("asks those who are too young for a guardian's address, and says that nothing
   fireEvent.click(screen.getByTestId("ask-guardian"));
   expect(await screen.findByTestId("guardian-asked")).toBeTruthy();
   expect(server.bodiesOf("POST /guardian")).toEqual([{ email: "parent@orlow.example" }]);
+});
+
+it("asks for no address where a guardian is known and has the mail already", async () => {
+  server.to("POST /invites/accept", asPupil({ shares: false, waitsForGuardian: true }));
+  server.to("GET /guardian", { ...unasked, email: "parent@orlow.example", askedAt: "2026-12-01T18:00:00.000Z" });
+  await open();
+  await screen.findByTestId("join-name");
+  type("join-name", "Cass Wether");
+  type("join-year", "2013");
+  fireEvent.click(screen.getByRole("radio", { name: /^I agree/ }));
+  fireEvent.click(screen.getByTestId("join"));
+  expect((await screen.findByTestId("guardian-known")).textContent).toContain("went to parent@orlow.example");
+  expect(screen.getByTestId<HTMLInputElement>("guardian-email").value).toBe("parent@orlow.example");
+  expect(screen.getByTestId("ask-guardian").textContent).toBe("Ask once more");
 });
 
 it("says of a link that is over what to do", async () => {

@@ -1,16 +1,21 @@
+import { useQuery } from "@tanstack/react-query";
 import type { Href } from "expo-router";
 import { View } from "react-native";
 import { Card } from "@/features/ui/Card";
 import { EmptyState } from "@/features/ui/EmptyState";
 import { Heading } from "@/features/ui/Heading";
 import { LinkButton } from "@/features/ui/LinkButton";
+import { Notice } from "@/features/ui/Notice";
+import { QueryState } from "@/features/ui/QueryState";
 import type { Studio } from "@/shared/contract/studio/studio";
 import { GuardianForm } from "../consent/GuardianForm";
 import { consentWords } from "../home/PupilStudio";
+import { studioQueries } from "../studioQueries";
 import { teaches } from "../StudioPage";
 
 /** After joining: what holds now, and, for those under age, who confirms it. */
 export function Joined({ studio }: { studio: Studio }) {
+  const guardian = useQuery({ ...studioQueries.guardian(), enabled: studio.me.consent.waitsForGuardian });
   return (
     <View style={{ gap: 16, maxWidth: 560 }}>
       <EmptyState
@@ -22,7 +27,18 @@ export function Joined({ studio }: { studio: Studio }) {
       {studio.me.consent.waitsForGuardian && (
         <Card style={{ gap: 12 }}>
           <Heading level={2}>Parent or guardian</Heading>
-          <GuardianForm asked={null} />
+          <QueryState query={guardian} title="Whether somebody is asked already could not be opened">
+            {({ email, withdrawnAt }) => (
+              <>
+                {email !== null && withdrawnAt === null && (
+                  <Notice kind="good" title="They are asked already" testID="guardian-known">
+                    {`A mail about this studio went to ${email}.`}
+                  </Notice>
+                )}
+                <GuardianForm asked={email} />
+              </>
+            )}
+          </QueryState>
         </Card>
       )}
     </View>

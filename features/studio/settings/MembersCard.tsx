@@ -1,11 +1,12 @@
 import { useQuery } from "@tanstack/react-query";
+import { useRef, useState } from "react";
 import { View } from "react-native";
 import { http } from "@/features/api/httpClient";
 import { AskedTwice } from "@/features/ui/AskedTwice";
 import { Card } from "@/features/ui/Card";
 import { Heading } from "@/features/ui/Heading";
-import { Notice } from "@/features/ui/Notice";
 import { QueryState } from "@/features/ui/QueryState";
+import { Question, type QuestionProps } from "@/features/ui/Question";
 import { Select } from "@/features/ui/Select";
 import { Text } from "@/features/ui/Text";
 import { colors } from "@/features/ui/theme";
@@ -47,17 +48,43 @@ function inOrder(rows: readonly RosterRow[]): RosterRow[] {
   return [...rows].sort((a, b) => rank[a.role] - rank[b.role] || a.name.localeCompare(b.name, "en"));
 }
 
+function changeWords(name: string, role: StudioRole): Pick<QuestionProps, "question" | "text" | "confirmLabel"> {
+  if (role === "owner")
+    return {
+      question: `Pass the studio on to ${name}?`,
+      text: "Then only they can delete it, change who teaches and give it back to you. You stay as a teacher.",
+      confirmLabel: "Pass it on",
+    };
+  if (role === "pupil")
+    return {
+      question: `Make ${name} a pupil?`,
+      text: "They see nothing of the other pupils any more, and teach no longer.",
+      confirmLabel: "Make them a pupil",
+    };
+  return {
+    question: `Make ${name} a teacher here?`,
+    text: "They see and hear everything that the pupils agreed to show.",
+    confirmLabel: "Make them a teacher",
+  };
+}
+
 function Member({ studio, row }: { studio: Studio; row: RosterRow }) {
   const path = `/studios/${studio.id}/members/${row.memberId}`;
-  const change = useStudioChange((role: StudioRole) => http.put(path, { role }));
+  /** chosen, and asked about before it happens */
+  const [wanted, setWanted] = useState<StudioRole | null>(null);
+  const change = useStudioChange(async (role: StudioRole) => {
+    await http.put(path, { role });
+    setWanted(null);
+  });
   const remove = useStudioChange(() => http.delete(path));
+  const box = useRef<HTMLDivElement>(null);
   const owner = studio.me.role === "owner";
   const me = row.memberId === studio.me.memberId;
   const roles = (["co-teacher", "pupil", ...(row.role === "co-teacher" ? (["owner"] as const) : [])] as const).map(
     (value) => ({ value, label: value === "owner" ? "Owner, in your place" : roleWords[value] }),
   );
   return (
-    <View>
+    <div ref={box}>
       <View style={{ flexDirection: "row", flexWrap: "wrap", alignItems: "center", columnGap: 16, minHeight: 48 }}>
         <Text variant="strong" style={{ flexGrow: 1, flexShrink: 1 }}>
           {row.name}
@@ -67,20 +94,27 @@ function Member({ studio, row }: { studio: Studio; row: RosterRow }) {
             inline
             label={`What ${row.name} is here`}
             options={roles}
-            value={row.role === "owner" ? "co-teacher" : row.role}
-            onChange={(role) => change.mutate(role)}
+            value={wanted ?? (row.role === "owner" ? "co-teacher" : row.role)}
+            onChange={(role) => {
+              change.reset();
+              setWanted(role === row.role ? null : role);
+            }}
             testID={`role-${row.memberId}`}
           />
         ) : (
           <Text tone="soft">{me ? `${roleWords[row.role]}, you` : roleWords[row.role]}</Text>
         )}
-        {!me && row.role !== "owner" && (
+        {!me && row.role !== "owner" && wanted === null && (
           <AskedTwice
             icon={null}
             label="Take out"
             accessibleName={`Take out: ${row.name}`}
             question={`Take ${row.name} out of the studio?`}
-            text="What they handed in is deleted here. Their own account, voice and songs stay theirs."
+            text={
+              row.role === "pupil"
+                ? "What they handed in is deleted here. Their own account, voice and songs stay theirs."
+                : "They see nothing of the studio any more. What they gave and wrote stays."
+            }
             failed="Nothing was changed."
             confirmLabel="Take out"
             keepLabel="Let stay"
@@ -91,7 +125,21 @@ function Member({ studio, row }: { studio: Studio; row: RosterRow }) {
           />
         )}
       </View>
-      {change.error && <Notice kind="error">{change.error.message}</Notice>}
-    </View>
+      {wanted !== null && (
+        <Question
+          key={wanted}
+          {...changeWords(row.name, wanted)}
+          failed="Nothing was changed."
+          keepLabel="Leave it"
+          onConfirm={() => change.mutate(wanted)}
+          onKeep={() => {
+            setWanted(null);
+            box.current?.querySelector("select")?.focus();
+          }}
+          busy={change.isPending}
+          error={change.error}
+        />
+      )}
+    </div>
   );
 }

@@ -13,6 +13,10 @@ const inviteSchema = { name: "Invite", schema: invite };
 const missing = { description: "There is no such invitation (not-found)." };
 const common = { tag: "studio", signedIn: true } as const;
 
+const teachersOrOwner = {
+  description: "Not a teacher (teachers-only), or to invite a teacher and not the owner (owner-only).",
+};
+
 /** Invitations: made, sent again and taken back by teachers; looked at and accepted by whoever has the link. */
 export function invitesRoutes(api: Api, { invites, studios, limits }: StudioParts): void {
   api.route(
@@ -63,7 +67,7 @@ export function invitesRoutes(api: Api, { invites, studios, limits }: StudioPart
       summary: "Send a new link, good for seven days from now; the old one is worth nothing then",
       answers: {
         200: { description: "Written to again.", schema: inviteSchema },
-        403: teachersOnly,
+        403: teachersOrOwner,
         404: missing,
         409: { description: "It was accepted or taken back (invite-over)." },
         429: tooMany,
@@ -83,7 +87,7 @@ export function invitesRoutes(api: Api, { invites, studios, limits }: StudioPart
       method: "delete",
       path: "/studios/:id/invites/:inviteId",
       summary: "Take an invitation back; its link is worth nothing from now on",
-      answers: { 204: { description: "Taken back." }, 403: teachersOnly, 404: missing },
+      answers: { 204: { description: "Taken back." }, 403: teachersOrOwner, 404: missing },
     },
     async (req, res) => {
       const inviteId = idIn(req.params, "inviteId", "invitation");

@@ -15,7 +15,7 @@ const purpose = "studio-invite";
 const lifeDays = 7;
 const lifeS = lifeDays * 24 * 3600;
 const page = "/invite";
-/** of one studio, at a time */
+/** of one studio, at a time; expired ones do not count */
 const mostOpen = 500;
 
 /** Invitations by mail: a link that is good once, for seven days. */
@@ -52,14 +52,22 @@ export class InvitesService {
            VALUES ($1, $2, $3, $4, $5, $6, now(), now() + make_interval(days => $7))
            ON CONFLICT (studio_id, lower(email)) WHERE accepted_at IS NULL AND revoked_at IS NULL
            DO UPDATE SET invited_by = $3, role = $5, group_id = $6, sent_at = now(), expires_at = excluded.expires_at
+             WHERE studio_invites.role = 'pupil' OR $8
            RETURNING id`,
-          [randomUUID(), studioId, me.memberId, email, role, groupId, lifeDays],
+          [randomUUID(), studioId, me.memberId, email, role, groupId, lifeDays, me.role === "owner"],
         );
-        made.push(await this.send(manager, rows[0]?.id ?? ""));
+        if (!rows[0])
+          throw new HttpProblem(
+            403,
+            "owner-only",
+            `The owner has invited ${email} to teach here; only they change that.`,
+          );
+        made.push(await this.send(manager, rows[0].id));
       }
       const open = await manager
         .createQueryBuilder(StudioInviteEntity, "invite")
         .where("invite.studioId = :studioId AND invite.acceptedAt IS NULL AND invite.revokedAt IS NULL", { studioId })
+        .andWhere("invite.expiresAt > now()")
         .getCount();
       if (open > mostOpen)
         throw new HttpProblem(409, "collection-full", `A studio keeps at most ${mostOpen} open invitations.`);
@@ -69,7 +77,7 @@ export class InvitesService {
 
   /** A new link in place of the old one. */
   async resend(userId: string, studioId: string, inviteId: string): Promise<Invite> {
-    await this.access.teacher(userId, studioId);
+    await this.mayChange(userId, studioId, inviteId);
     return this.dataSource.transaction(async (manager) => {
       const [rows]: [object[], number] = await manager.query(
         `UPDATE studio_invites SET sent_at = now(), expires_at = now() + make_interval(days => $3)
@@ -87,7 +95,7 @@ export class InvitesService {
 
   /** Takes an invitation back; again changes nothing. */
   async revoke(userId: string, studioId: string, inviteId: string): Promise<void> {
-    await this.access.teacher(userId, studioId);
+    await this.mayChange(userId, studioId, inviteId);
     await this.dataSource.transaction(async (manager) => {
       const [, count]: [unknown, number] = await manager.query(
         `UPDATE studio_invites SET revoked_at = CASE WHEN accepted_at IS NULL THEN coalesce(revoked_at, now()) END
@@ -150,6 +158,13 @@ export class InvitesService {
       if (agree) await this.consent.give(manager, memberId, userId);
       return studioId;
     });
+  }
+
+  /** Who teaches is the owner's to say, also while it is an invitation. */
+  private async mayChange(userId: string, studioId: string, inviteId: string): Promise<void> {
+    await this.access.teacher(userId, studioId);
+    if ((await this.dataSource.manager.countBy(StudioInviteEntity, { id: inviteId, studioId, role: "co-teacher" })) > 0)
+      await this.access.owner(userId, studioId);
   }
 
   private async send(manager: EntityManager, inviteId: string): Promise<Invite> {

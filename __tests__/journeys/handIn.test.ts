@@ -44,7 +44,7 @@ async function comeIn(page: Page, email: string, next: string, put?: (token: str
   await page.waitForURL(`**${next}`);
 }
 
-test("a pupil sings what was given and hands it in over a connection that breaks; the teacher hears it, says something at a time, and nothing once consent is withdrawn", async () => {
+test("a pupil sings what was given and hands it in over a connection that breaks; the teacher hears it, says something at a time, accepts it, and hears nothing once consent is withdrawn", async () => {
   const [pupil, teacher] = [await stage.open("none", "phone"), await stage.open("none", "wide")];
   const [songId, studioId, pupilId, teacherId, assignmentId, partId] = Array.from({ length: 6 }, randomUUID);
   await singWhenCounted(pupil.page);
@@ -74,15 +74,35 @@ test("a pupil sings what was given and hands it in over a connection that breaks
   await page.getByTestId("hand-in-now").waitFor({ timeout: 60_000 });
   await page.getByTestId("try-effort").getByRole("radio", { name: "2", exact: true }).click();
 
-  let cut = true;
-  await pupil.context.route("**/api/uploads/*", (route) => (cut ? route.abort("connectionreset") : route.continue()));
+  // A slow line, cut while the take is on its way.
+  const line = await pupil.context.newCDPSession(page);
+  await line.send("Network.enable");
+  const slow = { latency: 0, downloadThroughput: -1, uploadThroughput: 60_000 };
+  await line.send("Network.emulateNetworkConditions", { ...slow, offline: false });
+  const resumedAt: number[] = [];
+  page.on("response", (response) => {
+    const offset = response.headers()["upload-offset"];
+    if (response.request().method() === "HEAD" && offset !== undefined) resumedAt.push(Number(offset));
+  });
   await page.getByTestId("hand-in-now").click();
-  await page.getByTestId("hand-in-sending").getByText("Waiting for the connection").waitFor({ timeout: 40_000 });
-  // Closed and opened again: the take is still there, and goes on by itself.
-  cut = false;
+  const sending = page.getByTestId("hand-in-sending");
+  await sending.getByRole("progressbar").waitFor();
+  await page.waitForFunction(
+    () =>
+      Number(
+        document.querySelector('[data-testid="hand-in-sending"] [role=progressbar]')?.getAttribute("aria-valuenow"),
+      ) >= 25,
+    undefined,
+    { timeout: 40_000 },
+  );
+  await line.send("Network.emulateNetworkConditions", { ...slow, offline: true });
+  await sending.getByText("Waiting for the connection").waitFor({ timeout: 60_000 });
+  await line.send("Network.emulateNetworkConditions", { ...slow, uploadThroughput: -1, offline: false });
+  // Closed and opened again: the take is still there, and goes on by itself from where it was.
   await page.goto(`/studio/parts/${partId}`);
-  await page.getByTestId("pupil-take").waitFor({ timeout: 40_000 });
-  expect(await page.getByTestId("hand-in-sending").count()).toBe(0);
+  await page.getByTestId("pupil-take").waitFor({ timeout: 60_000 });
+  expect(await sending.count()).toBe(0);
+  expect(Math.max(0, ...resumedAt)).toBeGreaterThan(0);
 
   const desk = teacher.page;
   await desk.goto(`/studio/parts/${partId}`);
@@ -97,6 +117,10 @@ test("a pupil sings what was given and hands it in over a connection that breaks
   await desk.getByTestId("go-to-mark").waitFor();
   await page.reload();
   await page.getByTestId("comment").getByText("Here the breath runs out.").waitFor();
+
+  await desk.getByTestId("answer-message").fill("Lovely, and softer next week.");
+  await desk.getByTestId("accept").click();
+  await desk.getByTestId("answered").waitFor();
 
   await stage.query(`UPDATE studio_members SET consent_withdrawn_at = now() WHERE id = '${pupilId}'`);
   await desk.reload();

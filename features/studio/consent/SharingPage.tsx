@@ -90,7 +90,7 @@ function ConsentCard({ studio, now }: { studio: Studio; now: Date }) {
             />
           )}
           question="Stop sharing?"
-          text={`From that moment they see only your name. What you handed in to ${studio.name} and the recorded answers are deleted for good.`}
+          text={`From that moment they see only your name. Recordings you handed in to ${studio.name} and recorded answers are deleted for good.`}
           failed="Nothing was changed."
           confirmLabel="Stop and delete them"
           keepLabel="Go on sharing"

@@ -20,6 +20,6 @@ export async function refuseEndOfSharing(
   throw new HttpProblem(
     409,
     "ends-sharing",
-    `By this your teachers see only your name (${names}) until a parent or guardian agrees, and what you handed in there is deleted for good.`,
+    `By this your teachers see only your name (${names}) until a parent or guardian agrees, and recordings you handed in there are deleted for good.`,
   );
 }

@@ -104,9 +104,7 @@ describe("going", () => {
     const key = await keyOf(id);
     expect(await held(key)).toEqual([]);
     expect(await recordOf(key)).toMatchObject({ why: "expired", deleted_at: expect.any(Date) });
-    expect(await listed(teacher)).toMatchObject([
-      { id, state: "deleted", picture: null, measures: null, effort: null },
-    ]);
+    expect(await listed(teacher)).toMatchObject([{ id, state: "deleted", picture: null, measures: null, effort: 2 }]);
   });
 
   it("an upload that never ends goes after a day, with every part of it", async () => {
@@ -158,7 +156,8 @@ describe("going", () => {
     expect(row?.handed_in_at).toBeNull();
     const { body: roster } = await place.teacher.get(`/api/studios/${place.studioId}/roster`).expect(200);
     const told = roster.find(({ memberId }: { memberId: string }) => memberId === place.pupilMemberId);
-    expect(told).toMatchObject({ lastTake: null, waiting: 0 });
+    // Its days are over, and only how it felt is left.
+    expect(told).toMatchObject({ lastTake: { effort: 1 }, waiting: 0 });
   });
 
   it("leaves an answer of the teacher as it is when its take goes, without how it felt", async () => {

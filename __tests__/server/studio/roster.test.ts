@@ -114,6 +114,18 @@ describe("a line of the roster", () => {
     expect((await teacher.get(`/api/studios/${studioId}`).expect(200)).body.counts).toEqual({ pupils: 1, waiting: 1 });
   });
 
+  it("still says how the last take felt when its recording has run out, and nothing of one that was not sent whole", async () => {
+    const { memberId } = await pupilIn(server, studioId);
+    const [part] = (await give(teacher, studioId, [memberId])).parts;
+    await handIn(part!.id, memberId, 3, "2026-08-20T18:00:00.000Z");
+    await server.database.query("UPDATE hand_ins SET state = 'deleted' WHERE part_id = $1", [part!.id]);
+    await handIn(part!.id, memberId, 5, "2026-11-20T18:00:00.000Z");
+    await server.database.query("UPDATE hand_ins SET state = 'uploading' WHERE part_id = $1 AND effort = 5", [
+      part!.id,
+    ]);
+    expect((await rowOf(memberId)).lastTake).toEqual({ at: "2026-08-20T18:00:00.000Z", effort: 3 });
+  });
+
   it("is the same for a co-teacher, and for nobody else", async () => {
     const { person: pupil } = await pupilIn(server, studioId);
     const [colleague, outsider] = [await Person.put(server, "singer", true), await Person.put(server, "admin", true)];
@@ -236,5 +248,19 @@ describe("a group", () => {
     await teacher.put(`${path}/${body.id}/key`, key([randomUUID()])).expect(422);
     const { person: third } = await pupilIn(server, studioId);
     await third.put(`${path}/${body.id}/key`, first).expect(403);
+  });
+
+  it("goes with its studio, however many pupils its key names", async () => {
+    const [a, b, c] = [
+      await pupilIn(server, studioId),
+      await pupilIn(server, studioId),
+      await pupilIn(server, studioId),
+    ];
+    const path = `/api/studios/${studioId}/groups`;
+    const ids = [a, b, c].map(({ memberId }) => memberId);
+    const { body } = await teacher.post(path, { name: "Finale", memberIds: ids }).expect(201);
+    await teacher.put(`${path}/${body.id}/key`, key(ids)).expect(200);
+    await teacher.delete(`/api/studios/${studioId}`).expect(204);
+    await teacher.get(path).expect(404);
   });
 });

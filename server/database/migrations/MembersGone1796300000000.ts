@@ -7,6 +7,10 @@ import type { MigrationInterface, QueryRunner } from "typeorm";
 const functions = `
 CREATE FUNCTION studio_member_gone() RETURNS trigger LANGUAGE plpgsql AS $$
 BEGIN
+  -- With its studio the group goes too, and may not be written meanwhile.
+  IF NOT EXISTS (SELECT FROM studios WHERE id = OLD.studio_id) THEN
+    RETURN NULL;
+  END IF;
   UPDATE studio_groups g SET keys = (
     SELECT coalesce(jsonb_agg(
       CASE WHEN k.key->'pupils' @> jsonb_build_array(jsonb_build_object('memberId', OLD.id)) THEN

@@ -24,7 +24,8 @@ export async function wakeDeletion(manager: EntityManager | DataSource): Promise
 
 /**
  * Takes recordings out of their threads and notes what is to be deleted; the parts go back to the take before. What had
- * not arrived leaves no row, so that its sender can begin anew. `condition` speaks of hand_ins as h.
+ * not arrived leaves no row, so that its sender can begin anew. How a take felt outlives a recording whose days are over,
+ * and nothing else. `condition` speaks of hand_ins as h.
  * @returns the keys of what is to go from the storage
  */
 export async function markDeleted(
@@ -38,12 +39,13 @@ export async function markDeleted(
       `WITH never AS (
          DELETE FROM hand_ins h WHERE h.state = 'uploading' AND (${condition}) RETURNING h.storage_key, h.part_id
        ), heard AS (
-         UPDATE hand_ins h SET state = 'deleted', picture = NULL, measures = NULL, effort = NULL
+         UPDATE hand_ins h SET state = 'deleted', picture = NULL, measures = NULL,
+           effort = CASE WHEN $${values.length + 1}::text = 'expired' THEN h.effort END
          WHERE h.state = 'ready' AND (${condition}) RETURNING h.storage_key, h.part_id
        ), gone AS (
          SELECT * FROM never UNION ALL SELECT * FROM heard
        ), noted AS (
-         INSERT INTO deletion_records (storage_key, why) SELECT storage_key, $${values.length + 1} FROM gone
+         INSERT INTO deletion_records (storage_key, why) SELECT storage_key, $${values.length + 1}::text FROM gone
          ON CONFLICT (storage_key) DO UPDATE SET deleted_at = NULL, why = excluded.why, asked_at = now()
        )
        SELECT storage_key AS key, part_id AS "partId" FROM gone`,

@@ -144,7 +144,7 @@ export class RosterService {
     );
   }
 
-  /** The newest two takes of each that were handed in, newest first. */
+  /** The newest two takes of each that were handed in, newest first; also where only how it felt is left of one. */
   private async efforts(studioId: string): Promise<Map<string, SungEffort[]>> {
     const rows: (SungEffort & { memberId: string })[] = await this.dataSource.query(
       `SELECT "memberId", at, effort, strained FROM (
@@ -152,7 +152,7 @@ export class RosterService {
                 h.measures#>>'{fellShort,side}' = 'above' AS strained,
                 row_number() OVER (PARTITION BY p.member_id ORDER BY h.created_at DESC, h.id) AS place
          FROM hand_ins h JOIN assignment_parts p ON p.id = h.part_id
-         WHERE p.studio_id = $1 AND h.kind = 'pupil-take' AND h.state = 'ready') newest
+         WHERE p.studio_id = $1 AND h.kind = 'pupil-take' AND (h.state = 'ready' OR h.state = 'deleted' AND h.effort IS NOT NULL)) newest
        WHERE place <= 2 ORDER BY "memberId", place`,
       [studioId],
     );

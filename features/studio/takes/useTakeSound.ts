@@ -54,7 +54,6 @@ export function useTakeSound(handInId: string, durationS: number): TakeSound {
         setProblem(notPlayed);
       }
     };
-    const follow = () => setAtS(element.currentTime);
     const ended = () => {
       setState("still");
       wanted.current = 0;
@@ -63,12 +62,7 @@ export function useTakeSound(handInId: string, durationS: number): TakeSound {
     element.addEventListener("ended", ended);
     element.addEventListener("pause", paused);
     element.addEventListener("error", broke);
-    let frame = requestAnimationFrame(function look() {
-      frame = requestAnimationFrame(look);
-      if (!element.paused) follow();
-    });
     return () => {
-      cancelAnimationFrame(frame);
       element.removeEventListener("ended", ended);
       element.removeEventListener("pause", paused);
       element.removeEventListener("error", broke);
@@ -77,6 +71,16 @@ export function useTakeSound(handInId: string, durationS: number): TakeSound {
       element.load();
     };
   }, []);
+
+  useEffect(() => {
+    if (state !== "playing") return;
+    let frame = requestAnimationFrame(function look() {
+      frame = requestAnimationFrame(look);
+      const element = audio.current;
+      if (element && !element.paused) setAtS(element.currentTime);
+    });
+    return () => cancelAnimationFrame(frame);
+  }, [state]);
 
   const play = useCallback(async () => {
     const element = audio.current;

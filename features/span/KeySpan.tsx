@@ -4,7 +4,7 @@ import { glyphs, noteName, type Spelling } from "@/shared/music/pitch";
 import { SvgLabel } from "@/features/ui/SvgLabel";
 import { colors } from "@/features/ui/theme";
 import { ground, Hatch, useDrawingId } from "./Hatch";
-import { isNatural, ladderWords, sideOf, type Scale } from "./ladderGeometry";
+import { isNatural, ladderWords, semitonesOf, sideOf, type Scale } from "./ladderGeometry";
 import { edges, keySpanWidth, keySpanX, markHeight, seamless } from "./keySpanGeometry";
 
 export interface KeySpanProps {
@@ -50,7 +50,7 @@ export function KeySpan({
   const name = (midi: number) => glyphs(noteName(midi, spelling));
   const tone = (mark: KeyMark) =>
     mark.zone === "beyond" ? colors.brick : mark.zone === "reach" ? colors.honeyText : colors.ink;
-  const rungs = Array.from({ length: scale.high - scale.low + 1 }, (_, index) => scale.low + index).filter(isNatural);
+  const rungs = semitonesOf(scale).filter(isNatural);
   return (
     <Svg
       width={width}

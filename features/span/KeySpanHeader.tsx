@@ -4,7 +4,7 @@ import { glyphs, noteName, type Spelling } from "@/shared/music/pitch";
 import { SvgLabel } from "@/features/ui/SvgLabel";
 import { colors } from "@/features/ui/theme";
 import { edges, isNamed, keySpanWidth, keySpanX } from "./keySpanGeometry";
-import { isNatural, type Scale } from "./ladderGeometry";
+import { isNatural, semitonesOf, type Scale } from "./ladderGeometry";
 
 export interface KeySpanHeaderProps {
   voice: SingingVoice;
@@ -21,9 +21,7 @@ export function KeySpanHeader({ voice, scale, perSemitone = 14.4, spelling = "co
   const low = name(voice.comfort.lowMidi);
   const high = name(voice.comfort.highMidi);
   const roomy = softRight - softLeft > 170;
-  const naturals = Array.from({ length: scale.high - scale.low + 1 }, (_, index) => scale.low + index).filter(
-    isNatural,
-  );
+  const naturals = semitonesOf(scale).filter(isNatural);
   const reach = [
     { from: left, to: softLeft },
     { from: softRight, to: right },

@@ -1,7 +1,7 @@
 import Svg, { ClipPath, Defs, G, Line, Path, Rect } from "react-native-svg";
 import { Hatch, useDrawingId } from "./Hatch";
 import { stripX } from "./VoiceStrip";
-import type { Scale } from "./ladderGeometry";
+import { semitonesOf, type Scale } from "./ladderGeometry";
 import { colors, mixtures } from "@/features/ui/theme";
 import type { SingingVoice } from "@/shared/keys/keyScore";
 import { glyphs, noteName } from "@/shared/music/pitch";
@@ -33,14 +33,22 @@ export function SpanBar({ voice, span, scale, width, words, tall = false }: Span
   const [left, right] = [x(voice.range.lowMidi) - half, x(voice.range.highMidi) + half];
   const [softLeft, softRight] = [x(voice.comfort.lowMidi) - half, x(voice.comfort.highMidi) + half];
   const middle = top + thick / 2;
-  const semitones = [...Array(scale.high - scale.low + 1).keys()].map((index) => scale.low + index);
+  const semitones = semitonesOf(scale);
   const octaves = semitones.filter((midi) => midi % 12 === 0);
   const between = tall ? semitones.filter((midi) => midi % 12 === 5 || midi % 12 === 9) : [];
   return (
     <Svg width={width} height={height} viewBox={`0 0 ${width} ${height}`} role="img" aria-label={words}>
       <Hatch id={`${id}s`} pitch={4.5} line={1.2} />
       {octaves.map((midi) => (
-        <Line key={midi} x1={x(midi)} x2={x(midi)} y1={0} y2={height} stroke={tall ? colors.line : mixtures.rungC} strokeWidth={1} />
+        <Line
+          key={midi}
+          x1={x(midi)}
+          x2={x(midi)}
+          y1={0}
+          y2={height}
+          stroke={tall ? colors.line : mixtures.rungC}
+          strokeWidth={1}
+        />
       ))}
       {between.map((midi) => (
         <Line

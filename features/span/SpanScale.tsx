@@ -1,7 +1,7 @@
 import Svg from "react-native-svg";
 import { SvgLabel } from "@/features/ui/SvgLabel";
 import { colors } from "@/features/ui/theme";
-import type { Scale } from "./ladderGeometry";
+import { semitonesOf, type Scale } from "./ladderGeometry";
 
 export interface SpanScaleProps {
   scale: Scale;
@@ -15,7 +15,7 @@ export interface SpanScaleProps {
 /** The names over spans that lie on one scale: every C, and F and A where there is room. */
 export function SpanScale({ scale, width, x, full = false }: SpanScaleProps) {
   const roomy = x(scale.low + 1) - x(scale.low) > (full ? 6.5 : 9);
-  const named = Array.from({ length: scale.high - scale.low + 1 }, (_, index) => scale.low + index).filter(
+  const named = semitonesOf(scale).filter(
     (midi) => (roomy ? [0, 5, 9] : [0]).includes(midi % 12) && x(midi) > 10 && x(midi) < width - 10,
   );
   return (

@@ -8,7 +8,7 @@ import { SvgLabel } from "@/features/ui/SvgLabel";
 import { Text } from "@/features/ui/Text";
 import { colors, mixtures } from "@/features/ui/theme";
 import { ground, Hatch, useDrawingId } from "./Hatch";
-import { isNatural, sideOf } from "./ladderGeometry";
+import { isNatural, semitonesOf, sideOf } from "./ladderGeometry";
 import { barWords, tessituragramWords, tunePlace, type TessituraBar, type TunePlace } from "./tessituragramWords";
 
 export interface TessituragramProps {
@@ -220,7 +220,7 @@ const rank = [0, 7, 4, 9, 2, 5, 11];
 
 /** Naturals, as many as stand apart. */
 function names(low: number, high: number, step: number): number[] {
-  const all = Array.from({ length: high - low + 1 }, (_, k) => low + k).filter(isNatural);
+  const all = semitonesOf({ low, high }).filter(isNatural);
   const byRank = [...all].sort((a, b) => rank.indexOf(a % 12) - rank.indexOf(b % 12));
   const named: number[] = [];
   for (const midi of byRank) if (named.every((other) => Math.abs(other - midi) * step >= 24)) named.push(midi);

@@ -4,7 +4,7 @@ import type { Spelling } from "@/shared/music/pitch";
 import { SvgLabel } from "@/features/ui/SvgLabel";
 import { colors, mixtures } from "@/features/ui/theme";
 import { ground, Hatch, useDrawingId } from "./Hatch";
-import { ladderWords, sideOf, type Scale } from "./ladderGeometry";
+import { ladderWords, semitonesOf, sideOf, type Scale } from "./ladderGeometry";
 
 export interface VoiceStripProps {
   voice: SingingVoice;
@@ -33,9 +33,7 @@ export function VoiceStrip({ voice, marks, scale, width = 120, spelling = "commo
   const softRight = x(voice.comfort.highMidi) + half;
   const longest = Math.max(0.01, ...marks.map((mark) => mark.share));
   const thick = Math.min(3.2, half * 1.4);
-  const octaves = [...Array(scale.high - scale.low + 1).keys()]
-    .map((index) => scale.low + index)
-    .filter((midi) => midi % 12 === 0);
+  const octaves = semitonesOf(scale).filter((midi) => midi % 12 === 0);
   return (
     <Svg
       width={width}

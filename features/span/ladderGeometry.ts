@@ -63,6 +63,11 @@ export interface Scale {
   high: number;
 }
 
+/** Every semitone of a picture, from low to high. */
+export function semitonesOf({ low, high }: Scale): number[] {
+  return Array.from({ length: high - low + 1 }, (_, k) => low + k);
+}
+
 /** The semitones that a ladder must show: voice and marks with a rung of air, ending on naturals. */
 export function ladderScale(voice: SingingVoice | null, marks: readonly Pick<KeyMark, "midi">[], air: number): Scale {
   const ends = [

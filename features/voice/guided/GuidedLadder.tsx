@@ -1,7 +1,7 @@
 import { useState } from "react";
 import { View } from "react-native";
 import Svg, { Circle, G, Line, Rect } from "react-native-svg";
-import { isNatural } from "@/features/span/ladderGeometry";
+import { isNatural, semitonesOf } from "@/features/span/ladderGeometry";
 import { SvgLabel } from "@/features/ui/SvgLabel";
 import { colors, mixtures } from "@/features/ui/theme";
 import { noteWord } from "../noteWords";
@@ -35,7 +35,7 @@ export function GuidedLadder({ run, live, listening, height }: GuidedLadderProps
   const { low, high } = scaleOf(run, sung);
   const step = (height - 16) / (high - low);
   const y = (midi: number) => 8 + (high - midi) * step;
-  const rungs = Array.from({ length: high - low + 1 }, (_, k) => low + k);
+  const rungs = semitonesOf({ low, high });
   const own = run.held.map(({ midi }) => midi);
   const bottom = Math.min(...own);
   const top = Math.max(...own);

@@ -1,6 +1,7 @@
 import { useCallback, useMemo, useState } from "react";
 import { Dimensions, View } from "react-native";
 import Svg, { Line, Path, Rect } from "react-native-svg";
+import { semitonesOf } from "@/features/span/ladderGeometry";
 import { PitchTrail } from "@/features/span/PitchTrail";
 import { Button } from "@/features/ui/Button";
 import { LiveText } from "@/features/ui/LiveText";
@@ -133,7 +134,7 @@ function Overview({ width, seconds, picture, part, children }: OverviewProps) {
   const { notes, low, high } = picture;
   const x = (t: number) => handleRoom + (t / seconds) * (width - 2 * handleRoom);
   const y = (midi: number) => 8 + ((high - midi) * (height - 16)) / (high - low);
-  const octaves = Array.from({ length: high - low + 1 }, (_, k) => low + k).filter((midi) => midi % 12 === 0);
+  const octaves = semitonesOf({ low, high }).filter((midi) => midi % 12 === 0);
   return (
     <View style={{ width, height: height + foot }}>
       <Svg width={width} height={height} viewBox={`0 0 ${width} ${height}`} role="img" aria-label={takeWords(picture)}>

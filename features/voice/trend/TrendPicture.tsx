@@ -2,7 +2,7 @@ import { useState } from "react";
 import { View } from "react-native";
 import Svg, { Circle, G, Line, Path, Polyline, Rect } from "react-native-svg";
 import { Hatch, useDrawingId } from "@/features/span/Hatch";
-import { isNatural } from "@/features/span/ladderGeometry";
+import { isNatural, semitonesOf } from "@/features/span/ladderGeometry";
 import { Button } from "@/features/ui/Button";
 import { Heading } from "@/features/ui/Heading";
 import { SvgLabel } from "@/features/ui/SvgLabel";
@@ -61,7 +61,7 @@ function Drawing({ points, width }: { points: readonly TrendPoint[]; width: numb
   const places = trendPlaces(points, names + 24, width - 24, gap);
   const at = (k: number) => places[k] ?? 0;
   const line = (of: (point: TrendPoint) => number) => points.map((point, k) => `${at(k)},${y(of(point))}`).join(" ");
-  const rungs = Array.from({ length: high - low + 1 }, (_, k) => low + k).filter(isNatural);
+  const rungs = semitonesOf({ low, high }).filter(isNatural);
   // Neighbours like E and F would run into each other.
   const named = rungs.filter((midi) => step >= 13 || (step >= 6.5 ? [0, 4, 7, 9] : [0, 7]).includes(midi % 12));
   return (

@@ -1,6 +1,7 @@
 import { glyphs, noteName, type Spelling } from "../music/pitch";
 import type { KeyMark, KeyParts } from "./keyScore";
 import { partMaxima, type VoiceEdges } from "./keyParts";
+import { countWord } from "../music/countWords";
 
 /** Said of a key that was judged without knowing which notes of the span are sung how long. */
 export const COARSE_WORDS = "Judged by the span alone.";
@@ -119,22 +120,7 @@ function stepsInWords(steps: number): string {
 }
 
 function semitones(count: number): string {
-  const words = [
-    "no",
-    "one",
-    "two",
-    "three",
-    "four",
-    "five",
-    "six",
-    "seven",
-    "eight",
-    "nine",
-    "ten",
-    "eleven",
-    "twelve",
-  ];
-  return `${words[count] ?? count} semitone${count === 1 ? "" : "s"}`;
+  return `${countWord(count)} semitone${count === 1 ? "" : "s"}`;
 }
 
 function shareOf(marks: readonly KeyMark[]): number {

@@ -6,6 +6,7 @@ import { tonicPitchClass } from "../music/keyName";
 import { glyphs } from "../music/pitch";
 import type { Shape } from "./way";
 import { listWords } from "../music/listWords";
+import { countWord } from "../music/countWords";
 
 const toneNames: Record<number, string> = {
   0: "root",
@@ -45,7 +46,6 @@ const plainer = [
   "dim",
   "aug",
 ];
-const counts = ["no", "one", "two", "three", "four", "five", "six", "seven", "eight"];
 
 /**
  * What a shape leaves out of its chord, in a sentence. The plain fifth, and the tones under the highest extension, are
@@ -67,7 +67,7 @@ export function leftOutWords(played: string, shape: Shape, instrument: Instrumen
   const what = `the ${listWords(names)} ${names.length === 1 ? "does" : "do"}`;
   const strings = instrument.strings.filter(({ startsAtFret }) => startsAtFret === undefined).length;
   const rest = plainName(chord, heard);
-  return `${glyphs(played)}${rest === null ? "" : ` as ${glyphs(rest)}`}: ${what} not fit on ${counts[strings] ?? strings} strings.`;
+  return `${glyphs(played)}${rest === null ? "" : ` as ${glyphs(rest)}`}: ${what} not fit on ${countWord(strings, 8)} strings.`;
 }
 
 /** Intervals above the root that sound, 0 to 11. */

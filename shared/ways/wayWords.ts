@@ -8,6 +8,7 @@ import { leftOutWords } from "./leftOutTones";
 import { missingShapes, missingWords } from "./missingShapes";
 import type { Shape, StringChange, Way, WayChord } from "./way";
 import { listWords } from "../music/listWords";
+import { capitalized, countWord, plural } from "../music/countWords";
 
 /** What the words about a way are made from. */
 export interface WayFacts {
@@ -28,21 +29,6 @@ export interface WayFacts {
 }
 
 const kgPerLb = 0.45359237;
-const counts = [
-  "No",
-  "One",
-  "Two",
-  "Three",
-  "Four",
-  "Five",
-  "Six",
-  "Seven",
-  "Eight",
-  "Nine",
-  "Ten",
-  "Eleven",
-  "Twelve",
-];
 
 /**
  * What to do, in one sentence without a full stop.
@@ -76,7 +62,8 @@ export function wayCost({ retune, capo, chords, asWritten, instrument }: WayFact
   ];
   if (asWritten) sentences.push("The chart as written.");
   const strings = instrument.strings.length;
-  if (retune !== 0) sentences.push(`${counts[strings] ?? strings} strings to ${retune < 0 ? "let down" : "bring up"}.`);
+  if (retune !== 0)
+    sentences.push(`${capitalized(countWord(strings))} strings to ${retune < 0 ? "let down" : "bring up"}.`);
   if (capo > 0) sentences.push(`${instrument.frets - capo} frets left.`);
   return sentences.filter(Boolean).join(" ");
 }
@@ -196,30 +183,21 @@ function shapeKinds(shapes: readonly Shape[], partly: boolean): string {
   if (shapes.length === 0) return "";
   if (barre === 0 && closed === 0)
     return partly ? "The others are open shapes, no barre." : "Open shapes only, no barre.";
-  const kinds = [...(open > 0 ? [`${counted(open)} open`] : []), ...(closed > 0 ? [`${counted(closed)} closed`] : [])];
+  const kinds = [
+    ...(open > 0 ? [`${countWord(open)} open`] : []),
+    ...(closed > 0 ? [`${countWord(closed)} closed`] : []),
+  ];
   const last = closed > 0 ? closed : open;
   const named = kinds.length > 0 ? `${kinds.join(" and ")} shape${last === 1 ? "" : "s"}` : "";
-  const barres = barre === 0 ? "no barre" : barre === 1 ? "one barre" : `${counted(barre)} barres`;
+  const barres = barre === 0 ? "no barre" : barre === 1 ? "one barre" : `${countWord(barre)} barres`;
   const sentence = named === "" ? barres : `${named}, ${barres}`;
   return `${capitalized(sentence)}.`;
-}
-
-function capitalized(sentence: string): string {
-  return `${sentence.charAt(0).toUpperCase()}${sentence.slice(1)}`;
 }
 
 function keyInWords(key: KeyName): string {
   const tonic = glyphs(key.tonic);
   if (key.mode === "major") return tonic;
   return `${tonic} ${key.mode}`;
-}
-
-function counted(count: number): string {
-  return (counts[count] ?? `${count}`).toLowerCase();
-}
-
-function plural(count: number, noun: string): string {
-  return count === 1 ? `1 ${noun}` : `${count} ${noun}s`;
 }
 
 function kg(lb: number): string {

@@ -5,12 +5,11 @@ import { whyNotHigher } from "@/shared/keys/whyNotHigher";
 import { distanceWords } from "@/shared/music/moveWords";
 import { glyphs, noteName, type Spelling } from "@/shared/music/pitch";
 import type { KeyRow } from "../keyRows";
-
-const numbers = ["No", "One", "Two", "Three", "Four"];
+import { capitalized, countWord } from "@/shared/music/countWords";
 
 /** "Three keys, side by side" */
 export function compareTitle(count: number): string {
-  return `${numbers[count] ?? count} ${count === 1 ? "key" : "keys, side by side"}`;
+  return `${capitalized(countWord(count))} ${count === 1 ? "key" : "keys, side by side"}`;
 }
 
 /** What keeps the key a semitone higher from this one's score, or what it has over it; null where it is not known. */

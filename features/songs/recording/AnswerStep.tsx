@@ -14,6 +14,7 @@ import { distanceWords } from "@/shared/music/moveWords";
 import { glyphs } from "@/shared/music/pitch";
 import type { Reconciliation } from "@/shared/songs/reconcileKeys";
 import { clearChart, noteCapo, takeTransposed, type ChartChange } from "./chartChanges";
+import { capitalized } from "@/shared/music/countWords";
 
 export interface AnswerStepProps {
   song: Song;
@@ -43,7 +44,7 @@ export function AnswerStep({ song, answer, busy, onTake }: AnswerStepProps) {
               ? "The same notes"
               : kind === "mode"
                 ? "Same home note, other mode"
-                : `${capital(distanceWords(nearest))} ${nearest < 0 ? "lower" : "higher"} (${nearest > 0 ? "+" : "−"}${Math.abs(nearest)})`}
+                : `${capitalized(distanceWords(nearest))} ${nearest < 0 ? "lower" : "higher"} (${nearest > 0 ? "+" : "−"}${Math.abs(nearest)})`}
         </Text>
       </View>
       <View style={{ gap: 8, maxWidth: 640 }} testID="answer-words">
@@ -86,10 +87,6 @@ export function AnswerStep({ song, answer, busy, onTake }: AnswerStepProps) {
       </View>
     </View>
   );
-}
-
-function capital(words: string): string {
-  return words.charAt(0).toUpperCase() + words.slice(1);
 }
 
 function Named({ label, of }: { label: string; of: KeyName }) {

@@ -6,7 +6,7 @@ import { Text } from "@/features/ui/Text";
 import { colors, sizes } from "@/features/ui/theme";
 import { formParts, partNames, type PartName } from "@/shared/songs/formSketch";
 import type { StepProps } from "./BeatStep";
-import { clockWords } from "./listening";
+import { clockWords } from "@/features/ui/clockWords";
 import { useTap } from "./useTap";
 
 export interface FormStepProps extends StepProps {

@@ -1,4 +1,4 @@
-import { beginListening, clockWords, listening, type ListeningEvent } from "./listening";
+import { beginListening, listening, type ListeningEvent } from "./listening";
 
 const after = (...events: ListeningEvent[]) => events.reduce(listening, beginListening(96, null));
 
@@ -31,6 +31,3 @@ test("new taps set a chosen tempo aside, and only the latest are kept", () => {
   expect(after(...taps, { kind: "forgetTaps" }).taps).toEqual([]);
   expect(after({ kind: "over", atS: 3 }).endS).toBeNull();
 });
-
-test("times read as on a player", () =>
-  expect([0, 7.9, 67, 600].map(clockWords)).toEqual(["0:00", "0:07", "1:07", "10:00"]));

@@ -62,9 +62,3 @@ export function listening(state: Listening, event: ListeningEvent): Listening {
       return { ...state, home: event.home };
   }
 }
-
-/** "1:07". */
-export function clockWords(seconds: number): string {
-  const whole = Math.max(0, Math.floor(seconds));
-  return `${Math.floor(whole / 60)}:${String(whole % 60).padStart(2, "0")}`;
-}

@@ -2,7 +2,7 @@ import { View } from "react-native";
 import { Button } from "@/features/ui/Button";
 import { LiveText } from "@/features/ui/LiveText";
 import { Notice } from "@/features/ui/Notice";
-import { plural } from "../roster/rosterWords";
+import { plural } from "@/shared/music/countWords";
 
 export interface AssignFootProps {
   chosen: number;

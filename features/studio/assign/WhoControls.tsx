@@ -3,7 +3,7 @@ import { View } from "react-native";
 import { Chip } from "@/features/ui/Chip";
 import { LiveText } from "@/features/ui/LiveText";
 import { Text } from "@/features/ui/Text";
-import { plural } from "../roster/rosterWords";
+import { plural } from "@/shared/music/countWords";
 import { studioQueries } from "../studioQueries";
 import type { PupilPart } from "./pupilParts";
 

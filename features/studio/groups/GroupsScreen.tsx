@@ -13,8 +13,8 @@ import type { RosterRow } from "@/shared/contract/studio/roster";
 import type { Studio } from "@/shared/contract/studio/studio";
 import { listWords } from "@/shared/music/listWords";
 import { glyphs } from "@/shared/music/pitch";
+import { plural } from "@/shared/music/countWords";
 import { pupilsOf } from "../roster/rosterView";
-import { plural } from "../roster/rosterWords";
 import { studioQueries, useStudioChange } from "../studioQueries";
 import { GroupForm } from "./GroupForm";
 

@@ -7,7 +7,8 @@ import { colors } from "@/features/ui/theme";
 import { webStyle } from "@/features/ui/webStyle";
 import type { Studio } from "@/shared/contract/studio/studio";
 import { listWords } from "@/shared/music/listWords";
-import { plural, studioFacts } from "../roster/rosterWords";
+import { plural } from "@/shared/music/countWords";
+import { studioFacts } from "../roster/rosterWords";
 import { teaches } from "../StudioPage";
 
 /** One studio in the list: what it is called, who is in it, and what waits. */

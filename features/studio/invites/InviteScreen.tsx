@@ -14,7 +14,7 @@ import { Select } from "@/features/ui/Select";
 import { useLayout } from "@/features/ui/useLayout";
 import type { Invite } from "@/shared/contract/studio/invite";
 import type { Studio } from "@/shared/contract/studio/studio";
-import { plural } from "../roster/rosterWords";
+import { plural } from "@/shared/music/countWords";
 import { studioQueries, useStudioRefresh } from "../studioQueries";
 import { InviteRows } from "./InviteRows";
 import { checkAddresses, readAddresses } from "./readAddresses";

@@ -13,8 +13,8 @@ import { Skeleton } from "@/features/ui/Skeleton";
 import { Text } from "@/features/ui/Text";
 import type { GuardianLook } from "@/shared/contract/studio/consent";
 import { listWords } from "@/shared/music/listWords";
+import { plural } from "@/shared/music/countWords";
 import { WhatIsSeen } from "../consent/WhatIsSeen";
-import { plural } from "../roster/rosterWords";
 
 type Word = "confirm" | "withdraw";
 

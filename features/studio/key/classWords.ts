@@ -1,6 +1,6 @@
 import { listWords } from "@/shared/music/listWords";
 import type { ClassKey, PupilKey } from "../judge/judgePupils";
-import { countWord } from "../roster/rosterWords";
+import { capitalized, countWord } from "@/shared/music/countWords";
 
 /** A pupil in the key that is looked at. */
 export interface InKey {
@@ -27,7 +27,7 @@ export function octaveSentence(pupils: readonly InKey[]): string {
   return octaves
     .map((octave) => {
       const who = pupils.filter((pupil) => octaveOf(pupil) === octave).map(({ name }) => name);
-      const subject = who.length <= namedUpTo ? listWords(who) : countWord(who.length);
+      const subject = who.length <= namedUpTo ? listWords(who) : capitalized(countWord(who.length, 20));
       const size = Math.abs(octave) === 1 ? "an octave" : `${Math.abs(octave)} octaves`;
       return `${subject} ${who.length === 1 ? "sings" : "sing"} it ${size} ${octave < 0 ? "lower" : "higher"}.`;
     })

@@ -10,8 +10,8 @@ import { colors } from "@/features/ui/theme";
 import { webStyle } from "@/features/ui/webStyle";
 import type { AssignmentListing } from "@/shared/contract/studio/assignment";
 import type { Studio } from "@/shared/contract/studio/studio";
+import { plural } from "@/shared/music/countWords";
 import { dayOf, dueWords } from "../dayWords";
-import { plural } from "../roster/rosterWords";
 import { studioQueries } from "../studioQueries";
 
 /** The songs given in a studio: those with takes to hear first, then the newest. */

@@ -8,7 +8,7 @@ import { FormEnd } from "@/features/ui/form/FormEnd";
 import { FormField } from "@/features/ui/form/FormField";
 import { LiveText } from "@/features/ui/LiveText";
 import { useStudioRefresh } from "../studioQueries";
-import { clockWords } from "./clockWords";
+import { clockWords } from "@/features/ui/clockWords";
 import type { TakeTime } from "./takesPlace";
 
 export interface CommentFormProps {

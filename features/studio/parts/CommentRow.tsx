@@ -7,7 +7,7 @@ import { colors } from "@/features/ui/theme";
 import type { Comment } from "@/shared/contract/studio/assignment";
 import { dayOf } from "../dayWords";
 import { useStudioChange } from "../studioQueries";
-import { clockWords } from "./clockWords";
+import { clockWords } from "@/features/ui/clockWords";
 
 export interface CommentRowProps {
   partId: string;

@@ -6,7 +6,7 @@ import { Dialog } from "@/features/ui/Dialog";
 import { LinkButton } from "@/features/ui/LinkButton";
 import { useLayout } from "@/features/ui/useLayout";
 import type { Studio } from "@/shared/contract/studio/studio";
-import { plural } from "./rosterWords";
+import { plural } from "@/shared/music/countWords";
 
 /** What a teacher does most: give a song, and hear what came in. */
 export function RosterActions({ studio }: { studio: Studio }) {

@@ -8,10 +8,11 @@ import { unseen } from "@/features/ui/unseen";
 import { webStyle } from "@/features/ui/webStyle";
 import type { RosterRow } from "@/shared/contract/studio/roster";
 import { glyphs } from "@/shared/music/pitch";
+import { plural } from "@/shared/music/countWords";
 import { dayOf, dueWords } from "../dayWords";
 import { partPath } from "../partWords";
 import { EffortBars } from "./EffortBars";
-import { assignedSpan, bandWords, pictureVoice, plural, silence, tuningWords } from "./rosterWords";
+import { assignedSpan, bandWords, pictureVoice, silence, tuningWords } from "./rosterWords";
 
 export interface RosterCellsProps {
   row: RosterRow;

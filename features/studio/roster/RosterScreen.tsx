@@ -15,6 +15,7 @@ import { Skeleton } from "@/features/ui/Skeleton";
 import { useLayout } from "@/features/ui/useLayout";
 import type { RosterRow } from "@/shared/contract/studio/roster";
 import type { Studio } from "@/shared/contract/studio/studio";
+import { plural } from "@/shared/music/countWords";
 import { studioQueries } from "../studioQueries";
 import { StudioLinks } from "./RosterActions";
 import { RosterControls } from "./RosterControls";
@@ -22,7 +23,6 @@ import { RosterList } from "./RosterList";
 import { rosterScale } from "./rosterScale";
 import { RosterTable } from "./RosterTable";
 import { pupilsOf, shownPupils, type RosterView } from "./rosterView";
-import { plural } from "./rosterWords";
 
 export interface RosterScreenProps {
   studio: Studio;

@@ -5,37 +5,15 @@ import type { SingingVoice } from "@/shared/keys/keyScore";
 import { glyphs, noteName } from "@/shared/music/pitch";
 import { effortWords } from "@/shared/voice/effortWords";
 import { dayInWords, daysUntil, distanceInDays } from "../dayWords";
+import { capitalized, countWord, plural } from "@/shared/music/countWords";
 
-const counted = [
-  "No",
-  "One",
-  "Two",
-  "Three",
-  "Four",
-  "Five",
-  "Six",
-  "Seven",
-  "Eight",
-  "Nine",
-  "Ten",
-  "Eleven",
-  "Twelve",
-];
-const teens = ["Thirteen", "Fourteen", "Fifteen", "Sixteen", "Seventeen", "Eighteen", "Nineteen", "Twenty"];
-
-/** A count at the head of a sentence: a word up to twenty, then figures. */
-export function countWord(count: number): string {
-  return [...counted, ...teens][count] ?? String(count);
-}
-
-export function plural(count: number, one: string, many = `${one}s`): string {
-  return `${count} ${count === 1 ? one : many}`;
-}
+/** The largest class that a title says in a word. */
+const inAWord = 20;
 
 /** "Fourteen voices" */
 export function voicesTitle(pupils: number): string {
   if (pupils === 0) return "No pupils yet";
-  return `${countWord(pupils)} ${pupils === 1 ? "voice" : "voices"}`;
+  return `${capitalized(countWord(pupils, inAWord))} ${pupils === 1 ? "voice" : "voices"}`;
 }
 
 /** "Concert in 16 days, Thu 10 December · 3 takes wait for your ear" */
@@ -45,7 +23,7 @@ export function studioFacts({ event, counts }: Pick<Studio, "event" | "counts">,
   const takes =
     waiting === 0 ? "no takes wait" : `${plural(waiting, "take")} ${waiting === 1 ? "waits" : "wait"} for your ear`;
   const words = [evening, takes].filter(Boolean).join(" · ");
-  return words.charAt(0).toUpperCase() + words.slice(1);
+  return capitalized(words);
 }
 
 /** A pupil's voice on whole semitones, for pictures. */

@@ -3,8 +3,8 @@ import { View } from "react-native";
 import { FormField } from "@/features/ui/form/FormField";
 import { Text } from "@/features/ui/Text";
 import { useLayout } from "@/features/ui/useLayout";
+import { plural } from "@/shared/music/countWords";
 import { DayField } from "../DayField";
-import { plural } from "../roster/rosterWords";
 import { checkKeptDays, checkName, type StudioDraft } from "./studioForm";
 
 interface StudioFieldsProps<Values extends FieldValues> {

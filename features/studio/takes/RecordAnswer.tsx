@@ -8,7 +8,7 @@ import { LiveText } from "@/features/ui/LiveText";
 import { Notice } from "@/features/ui/Notice";
 import { mostTakeBytes, mostTakeS } from "@/shared/contract/studio/takeLimits";
 import type { Part } from "@/shared/contract/studio/assignment";
-import { clockWords } from "../parts/clockWords";
+import { clockWords } from "@/features/ui/clockWords";
 import { readSound, recordSound, type Recording } from "./recordSound";
 import { takeSender } from "./takeSender";
 

@@ -1,6 +1,7 @@
 import { useMemo, useState } from "react";
 import { View } from "react-native";
 import Svg, { Circle, Line, Path, Rect } from "react-native-svg";
+import { semitonesOf } from "@/features/span/ladderGeometry";
 import { Button } from "@/features/ui/Button";
 import { Notice } from "@/features/ui/Notice";
 import { SvgLabel } from "@/features/ui/SvgLabel";
@@ -9,7 +10,7 @@ import { colors, mixtures } from "@/features/ui/theme";
 import type { Comment } from "@/shared/contract/studio/assignment";
 import type { HandIn, TakePicture } from "@/shared/contract/studio/handIn";
 import { glyphs, noteName } from "@/shared/music/pitch";
-import { clockWords } from "../parts/clockWords";
+import { clockWords } from "@/features/ui/clockWords";
 import type { TakeTime } from "../parts/takesPlace";
 import { pitchSpan, trailPath, wavePath, xOf, yOf, type PlayerPlace } from "./playerGeometry";
 import { useTakeSound } from "./useTakeSound";
@@ -164,9 +165,7 @@ function Picture({ picture, durationS, width, atS, marks }: PictureProps) {
     () => ({ trail: trailPath(place, picture.trail), wave: wavePath(picture.waveform, width, waveHeight) }),
     [place, picture, width],
   );
-  const octaves = Array.from({ length: place.high - place.low + 1 }, (_, k) => place.low + k).filter(
-    (m) => m % 12 === 0,
-  );
+  const octaves = semitonesOf(place).filter((midi) => midi % 12 === 0);
   const now = xOf(place, atS);
   return (
     <Svg

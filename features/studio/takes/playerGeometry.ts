@@ -1,4 +1,5 @@
 import type { TakePicture } from "@/shared/contract/studio/handIn";
+import { median } from "@/shared/signal/median";
 
 /** Where the pitch of a take is drawn, in px. */
 export interface PlayerPlace {
@@ -42,10 +43,6 @@ export function trailPath(place: PlayerPlace, trail: TakePicture["trail"]): stri
       return `${command}${xOf(place, t).toFixed(1)} ${yOf(place, midi).toFixed(1)}`;
     })
     .join("");
-}
-
-function median(values: number[]): number {
-  return [...values].sort((a, b) => a - b)[values.length >> 1] ?? 0;
 }
 
 /** The waveform as a filled shape round the middle of a strip; the loudest reaches its edges. */

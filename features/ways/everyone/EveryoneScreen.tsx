@@ -27,6 +27,7 @@ import { AddPlayer } from "./AddPlayer";
 import { FixedPlan } from "./FixedPlan";
 import { PlayerPlan } from "./PlayerPlan";
 import { withWay } from "./playersOf";
+import { capitalized } from "@/shared/music/countWords";
 
 /** A key to choose: where it lies from the song as written, and what is said of it. */
 interface KeyChoice {
@@ -63,7 +64,7 @@ export function EveryoneScreen(props: EveryoneScreenProps) {
   const { players } = lineUp;
   const offered = [
     ...props.offered,
-    ...fixedInstruments.map((each) => ({ value: each.id, label: capital(fixedName(each)) })),
+    ...fixedInstruments.map((each) => ({ value: each.id, label: capitalized(fixedName(each)) })),
   ];
   const change = (next: readonly Player[], words: string) => {
     lineUp.change(next);
@@ -188,7 +189,7 @@ interface PlayerCardProps extends Pick<EveryoneScreenProps, "song" | "into" | "s
 function PlayerCard({ song, into, shift, lineUp, instrumentOf, chords, player, change, remove }: PlayerCardProps) {
   const fixed = findFixed(player.instrument);
   const strung = fixed ? null : instrumentOf(player.instrument);
-  const words = fixed ? capital(fixedName(fixed)) : (strung?.words ?? "An instrument that is not there any more");
+  const words = fixed ? capitalized(fixedName(fixed)) : (strung?.words ?? "An instrument that is not there any more");
   return (
     <Card testID="player" style={{ gap: 12, height: "100%" }}>
       <View style={{ flexDirection: "row", justifyContent: "space-between", gap: 8 }}>
@@ -244,7 +245,3 @@ html,body,#root{background:#fff!important}
 button:not([role=radio]),[role=button],[data-screen],[role=radiogroup] [aria-checked=false]{display:none!important}
 [role=main]{max-width:none!important}
 *{print-color-adjust:exact;-webkit-print-color-adjust:exact}}`;
-
-function capital(words: string): string {
-  return words.charAt(0).toUpperCase() + words.slice(1);
-}

@@ -13,6 +13,7 @@ import { soundAt } from "../../instruments/soundAt";
 import { retuned, stringLetters } from "../tunedNeck";
 import type { LeftOut, NeckDot, WhyStep } from "../whyStep";
 import { listWords } from "../../music/listWords";
+import { capitalized } from "../../music/countWords";
 
 const mostShapes = 3;
 /** Frets that are offered for an answer. */
@@ -134,12 +135,12 @@ function checkPlace(
   const name = glyphs(target);
   const at = fret === 0 ? `the open ${letters[string]} string` : `fret ${fret} of the ${letters[string]} string`;
   if (string === movable.rootString && right.includes(fret))
-    return { right: true, words: `${capital(at)} is ${glyphs(root)}, and there the shape plays ${name}.` };
+    return { right: true, words: `${capitalized(at)} is ${glyphs(root)}, and there the shape plays ${name}.` };
   if (string !== movable.rootString) {
     const there =
       pitchClass(midi) === tonicPitchClass(root)
-        ? `${capital(at)} is ${note}, but this`
-        : `${capital(at)} is ${note}. This`;
+        ? `${capitalized(at)} is ${note}, but this`
+        : `${capitalized(at)} is ${note}. This`;
     return { right: false, words: `${there} shape has its root on the ${own} string. Look for ${glyphs(root)} there.` };
   }
   const nearest = right.reduce((a, b) => (Math.abs(b - fret) < Math.abs(a - fret) ? b : a));
@@ -147,11 +148,11 @@ function checkPlace(
   if (pitchClass(midi) === tonicPitchClass(root))
     return {
       right: false,
-      words: `${capital(at)} is ${note}, but the shape would reach past the neck. Find ${note} once more.`,
+      words: `${capitalized(at)} is ${note}, but the shape would reach past the neck. Find ${note} once more.`,
     };
   return {
     right: false,
-    words: `${capital(at)} is ${note}. ${glyphs(root)} lies ${distanceWords(off)} ${off > 0 ? "further up" : "nearer to the nut"}.`,
+    words: `${capitalized(at)} is ${note}. ${glyphs(root)} lies ${distanceWords(off)} ${off > 0 ? "further up" : "nearer to the nut"}.`,
   };
 }
 
@@ -167,8 +168,4 @@ function dotsOf(shapes: readonly MovableShape[], tuned: Instrument, key: KeyName
 
 function unique(items: readonly string[]): string[] {
   return [...new Set(items)];
-}
-
-function capital(words: string): string {
-  return words.charAt(0).toUpperCase() + words.slice(1);
 }

@@ -1,6 +1,6 @@
 import { useQuery } from "@tanstack/react-query";
 import type { Href } from "expo-router";
-import type { ReactNode } from "react";
+import type { ComponentType, ReactNode } from "react";
 import { useSession } from "@/features/api/SessionProvider";
 import { EmptyState } from "@/features/ui/EmptyState";
 import { LinkButton } from "@/features/ui/LinkButton";
@@ -10,11 +10,16 @@ import { Skeleton } from "@/features/ui/Skeleton";
 import type { Studio } from "@/shared/contract/studio/studio";
 import { studioQueries } from "./studioQueries";
 
-/** What stands before a page: it shows the inside to whoever is signed in, and asks others to. The route brings it. */
-export type Door = (inside: () => ReactNode) => ReactNode;
+/**
+ * What stands before a page: it shows the inside to whoever is signed in, and asks others to, who come back to `here`.
+ * The route brings it.
+ */
+export type Door = ComponentType<{ here: string; wide: boolean; children: () => ReactNode }>;
 
-export interface StudioPageProps extends Pick<ScreenProps, "wide" | "large"> {
+export interface StudioPageProps {
   id: string;
+  /** which page of the studio, as its address says; "" for the first */
+  page?: string;
   door: Door;
   /** before the studio is here, and with it */
   title: string | ((studio: Studio | null) => string);
@@ -22,7 +27,6 @@ export interface StudioPageProps extends Pick<ScreenProps, "wide" | "large"> {
   /** where the page stands; the studio itself unless told otherwise */
   crumb?: (studio: Studio | null) => ScreenProps["crumb"];
   actions?: (studio: Studio) => ReactNode;
-  footer?: (studio: Studio) => ReactNode;
   /** in the place of the page for those who do not teach there */
   forPupils?: (studio: Studio) => ReactNode;
   children: (studio: Studio) => ReactNode;
@@ -39,15 +43,14 @@ const inStudio = (studio: Studio | null, id: string): ScreenProps["crumb"] => ({
 /** A page of one studio: asks for it, and says what there is to say while it is not here. */
 export function StudioPage({
   id,
-  door,
+  page = "",
+  door: Door,
   title,
   subtitle,
   crumb,
   actions,
-  footer,
   forPupils,
   children,
-  ...look
 }: StudioPageProps) {
   const signedIn = useSession().status === "signed-in";
   const query = useQuery({ ...studioQueries.detail(id), enabled: signedIn });
@@ -60,18 +63,19 @@ export function StudioPage({
       crumb={crumb ? crumb(studio) : inStudio(studio, id)}
       subtitle={studio === null ? undefined : subtitle?.(studio)}
       actions={mine && actions?.(mine)}
-      {...(footer ? { footer: mine && footer(mine) } : null)}
-      {...look}
+      wide
     >
-      {door(() => (
-        <QueryState
-          query={query}
-          title="The studio could not be opened"
-          skeleton={<Skeleton words="Fetching the studio" />}
-        >
-          {(found) => (teaches(found) ? children(found) : (forPupils?.(found) ?? <TeachersOnly id={found.id} />))}
-        </QueryState>
-      ))}
+      <Door here={`/studio/${id}${page === "" ? "" : `/${page}`}`} wide>
+        {() => (
+          <QueryState
+            query={query}
+            title="The studio could not be opened"
+            skeleton={<Skeleton words="Fetching the studio" />}
+          >
+            {(found) => (teaches(found) ? children(found) : (forPupils?.(found) ?? <TeachersOnly id={found.id} />))}
+          </QueryState>
+        )}
+      </Door>
     </Screen>
   );
 }

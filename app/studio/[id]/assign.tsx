@@ -14,16 +14,7 @@ import type { Studio } from "@/shared/contract/studio/studio";
 export default function AssignRoute() {
   const { id } = useLocalSearchParams<{ id: string }>();
   return (
-    <StudioPage
-      id={id}
-      wide
-      title="Assign a song"
-      door={(inside) => (
-        <SignedIn here={`/studio/${id}/assign`} wide>
-          {inside}
-        </SignedIn>
-      )}
-    >
+    <StudioPage id={id} title="Assign a song" page="assign" door={SignedIn}>
       {(studio) => <Assign studio={studio} />}
     </StudioPage>
   );

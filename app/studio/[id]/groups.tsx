@@ -6,16 +6,7 @@ import { StudioPage } from "@/features/studio/StudioPage";
 export default function GroupsRoute() {
   const { id } = useLocalSearchParams<{ id: string }>();
   return (
-    <StudioPage
-      id={id}
-      wide
-      title="Groups"
-      door={(inside) => (
-        <SignedIn here={`/studio/${id}/groups`} wide>
-          {inside}
-        </SignedIn>
-      )}
-    >
+    <StudioPage id={id} title="Groups" page="groups" door={SignedIn}>
       {(studio) => <GroupsScreen studio={studio} />}
     </StudioPage>
   );

@@ -20,12 +20,7 @@ export default function RosterRoute() {
   return (
     <StudioPage
       id={id}
-      wide
-      door={(inside) => (
-        <SignedIn here={`/studio/${id}`} wide>
-          {inside}
-        </SignedIn>
-      )}
+      door={SignedIn}
       title={(studio) => (!studio ? "Studio" : teaches(studio) ? voicesTitle(studio.counts?.pupils ?? 0) : studio.name)}
       crumb={(studio) => ({ label: studio && teaches(studio) ? `Studio / ${studio.name}` : "Studio", href: "/studio" })}
       subtitle={(studio) => (teaches(studio) ? studioFacts(studio, now) : undefined)}

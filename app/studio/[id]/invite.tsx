@@ -6,16 +6,7 @@ import { StudioPage } from "@/features/studio/StudioPage";
 export default function InviteRoute() {
   const { id } = useLocalSearchParams<{ id: string }>();
   return (
-    <StudioPage
-      id={id}
-      wide
-      title="Invite"
-      door={(inside) => (
-        <SignedIn here={`/studio/${id}/invite`} wide>
-          {inside}
-        </SignedIn>
-      )}
-    >
+    <StudioPage id={id} title="Invite" page="invite" door={SignedIn}>
       {(studio) => <InviteScreen studio={studio} now={new Date()} />}
     </StudioPage>
   );

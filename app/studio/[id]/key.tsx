@@ -14,16 +14,7 @@ import type { Studio } from "@/shared/contract/studio/studio";
 export default function KeyRoute() {
   const { id } = useLocalSearchParams<{ id: string }>();
   return (
-    <StudioPage
-      id={id}
-      wide
-      title="One key for all"
-      door={(inside) => (
-        <SignedIn here={`/studio/${id}/key`} wide>
-          {inside}
-        </SignedIn>
-      )}
-    >
+    <StudioPage id={id} title="One key for all" page="key" door={SignedIn}>
       {(studio) => <GroupsKey studio={studio} />}
     </StudioPage>
   );

@@ -6,16 +6,7 @@ import { StudioPage } from "@/features/studio/StudioPage";
 export default function SettingsRoute() {
   const { id } = useLocalSearchParams<{ id: string }>();
   return (
-    <StudioPage
-      id={id}
-      wide
-      title="Settings of the studio"
-      door={(inside) => (
-        <SignedIn here={`/studio/${id}/settings`} wide>
-          {inside}
-        </SignedIn>
-      )}
-    >
+    <StudioPage id={id} title="Settings of the studio" page="settings" door={SignedIn}>
       {(studio) => <SettingsScreen studio={studio} />}
     </StudioPage>
   );

@@ -14,15 +14,7 @@ export default function PartRoute() {
   const { id } = useLocalSearchParams<{ id: string }>();
   const now = useMemo(() => new Date(), []);
   return (
-    <PartPage
-      id={id}
-      now={now}
-      door={(inside) => (
-        <SignedIn here={`/studio/parts/${id}`} wide>
-          {inside}
-        </SignedIn>
-      )}
-    >
+    <PartPage id={id} now={now} door={SignedIn}>
       {(part) => (
         <PartScreen
           key={part.id}

@@ -31,7 +31,7 @@ function crumbOf(part: Part | undefined): { label: string; href: Href } {
 }
 
 /** The page of one part: for its pupil, and for the teachers. */
-export function PartPage({ id, door, now, children }: PartPageProps) {
+export function PartPage({ id, door: Door, now, children }: PartPageProps) {
   const signedIn = useSession().status === "signed-in";
   const query = useQuery({ ...studioQueries.part(id), enabled: signedIn });
   const part = query.data;
@@ -40,24 +40,26 @@ export function PartPage({ id, door, now, children }: PartPageProps) {
   const facts = part && [stateWords[part.side][part.state], partDue(part.state, part.dueOn, now)];
   return (
     <Screen title={title} wide crumb={crumbOf(part)} subtitle={facts?.filter(Boolean).join(" · ")}>
-      {door(() =>
-        gone ? (
-          <EmptyState
-            testID="no-such-part"
-            title="This is not here"
-            text="It was taken back, or it belongs to another account. Nothing of yours was changed."
-            action={<LinkButton label="To the studio" href={"/studio" as Href} />}
-          />
-        ) : (
-          <QueryState
-            query={query}
-            title="The song could not be opened"
-            skeleton={<Skeleton words="Opening the song" />}
-          >
-            {children}
-          </QueryState>
-        ),
-      )}
+      <Door here={`/studio/parts/${id}`} wide>
+        {() =>
+          gone ? (
+            <EmptyState
+              testID="no-such-part"
+              title="This is not here"
+              text="It was taken back, or it belongs to another account. Nothing of yours was changed."
+              action={<LinkButton label="To the studio" href={"/studio" as Href} />}
+            />
+          ) : (
+            <QueryState
+              query={query}
+              title="The song could not be opened"
+              skeleton={<Skeleton words="Opening the song" />}
+            >
+              {children}
+            </QueryState>
+          )
+        }
+      </Door>
     </Screen>
   );
 }

@@ -13,17 +13,13 @@ export default function AssignmentRoute() {
   return (
     <StudioPage
       id={id}
-      wide
       title={assignment?.title ?? "Assignment"}
       crumb={(studio) => ({
         label: studio ? `Studio / ${studio.name} / Assignments` : "Studio",
         href: `/studio/${id}/assignments` as Href,
       })}
-      door={(inside) => (
-        <SignedIn here={`/studio/${id}/assignments/${assignmentId}`} wide>
-          {inside}
-        </SignedIn>
-      )}
+      page={`assignments/${assignmentId}`}
+      door={SignedIn}
     >
       {(studio) => <AssignmentScreen studio={studio} assignmentId={assignmentId} now={new Date()} />}
     </StudioPage>

@@ -6,16 +6,7 @@ import { StudioPage } from "@/features/studio/StudioPage";
 export default function AssignmentsRoute() {
   const { id } = useLocalSearchParams<{ id: string }>();
   return (
-    <StudioPage
-      id={id}
-      wide
-      title="Assignments"
-      door={(inside) => (
-        <SignedIn here={`/studio/${id}/assignments`} wide>
-          {inside}
-        </SignedIn>
-      )}
-    >
+    <StudioPage id={id} title="Assignments" page="assignments" door={SignedIn}>
       {(studio) => <AssignmentsScreen studio={studio} now={new Date()} />}
     </StudioPage>
   );

@@ -2,6 +2,8 @@ import { Link } from "expo-router";
 import { memo, type CSSProperties } from "react";
 import { KeySign } from "@/features/ui/KeySign";
 import { Text } from "@/features/ui/Text";
+import { BlankCell } from "@/features/ui/table/BlankCell";
+import { cell } from "@/features/ui/table/tableStyles";
 import { colors, fonts } from "@/features/ui/theme";
 import { unseen } from "@/features/ui/unseen";
 import { webStyle } from "@/features/ui/webStyle";
@@ -68,7 +70,7 @@ export const SongCells = memo(function SongCells({
           )}
         </Link>
       </th>
-      <td style={td}>{written ? <KeySign of={written} size={20} tone="soft" /> : <Blank words="no key yet" />}</td>
+      <td style={td}>{written ? <KeySign of={written} size={20} tone="soft" /> : <BlankCell words="no key yet" />}</td>
       <td style={td} title={mine?.words}>
         {mine ? (
           <>
@@ -76,7 +78,7 @@ export const SongCells = memo(function SongCells({
             <span style={unseen}>{`. ${mine.words}`}</span>
           </>
         ) : (
-          <Blank words="not decided" />
+          <BlankCell words="not decided" />
         )}
       </td>
       {voice && (
@@ -97,7 +99,7 @@ export const SongCells = memo(function SongCells({
             )}
           </td>
           <td data-testid="fit" style={{ ...td, font: `600 16px/20px ${fonts.display}` }}>
-            {fit ?? <Blank words="not known" />}
+            {fit ?? <BlankCell words="not known" />}
           </td>
         </>
       )}
@@ -110,21 +112,4 @@ export const SongCells = memo(function SongCells({
   );
 });
 
-function Blank({ words }: { words: string }) {
-  return (
-    <>
-      <span aria-hidden style={{ color: colors.inkSoft }}>
-        –
-      </span>
-      <span style={unseen}>{words}</span>
-    </>
-  );
-}
-
-const td: CSSProperties = {
-  borderBottom: `1px solid ${colors.line}`,
-  padding: "0 12px 0 0",
-  height: 59,
-  verticalAlign: "middle",
-  overflowWrap: "anywhere",
-};
+const td: CSSProperties = { ...cell, height: 59 };

@@ -4,7 +4,7 @@ import type { TextStyle } from "react-native";
 import { View } from "react-native";
 import { KeySign } from "@/features/ui/KeySign";
 import { Text } from "@/features/ui/Text";
-import { colors, fonts } from "@/features/ui/theme";
+import { fonts } from "@/features/ui/theme";
 import { useLayout } from "@/features/ui/useLayout";
 import { webStyle } from "@/features/ui/webStyle";
 import type { SongListing } from "@/shared/contract/songListing";
@@ -13,6 +13,7 @@ import { RowChoice, RowMenuButton, type RowActions } from "./RowTools";
 import { listingWords, playedWords, shownKey, spanWords, sungSpan, type ShelfKey } from "./shelfRow";
 import { SpanBar } from "@/features/span/SpanBar";
 import { shelfScale } from "./shelfScale";
+import { ShownCards } from "@/features/ui/table/ShownCards";
 import { useShownRows } from "@/features/ui/table/useShownRows";
 
 export interface SongRowsProps {
@@ -28,28 +29,14 @@ export interface SongRowsProps {
 /** The songs as rows, for phones: as many as are in sight, with their place in the whole list. */
 export function SongRows({ songs, total, more, ...row }: SongRowsProps) {
   const keys = useMemo(() => songs.map(({ id }) => id), [songs]);
-  const { frame, rows, before, after, measure } = useShownRows(keys, 112, more);
+  const shown = useShownRows(keys, 112, more);
   return (
-    <div ref={frame} role="list" data-testid="songs" style={{ paddingTop: before, paddingBottom: after }}>
-      {rows.map(({ index, key }) => {
+    <ShownCards {...shown} total={total} testID="songs">
+      {(index) => {
         const song = songs[index];
-        return (
-          song && (
-            <div
-              key={key}
-              ref={measure}
-              data-index={index}
-              role="listitem"
-              aria-posinset={index + 1}
-              aria-setsize={total}
-              style={{ borderBottom: `1px solid ${colors.line}` }}
-            >
-              <SongRow song={song} {...row} />
-            </div>
-          )
-        );
-      })}
-    </div>
+        return song ? <SongRow song={song} {...row} /> : null;
+      }}
+    </ShownCards>
   );
 }
 

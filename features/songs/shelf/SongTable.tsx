@@ -1,12 +1,11 @@
 import { useMemo, type ReactNode } from "react";
-import { useWindowDimensions } from "react-native";
 import { keySpanWidth } from "@/features/span/keySpanGeometry";
 import { VoiceStripHeader } from "@/features/span/VoiceStrip";
 import { ShownRows } from "@/features/ui/table/ShownRows";
 import { SortHead } from "@/features/ui/table/SortHead";
 import { stuckHead, table } from "@/features/ui/table/tableStyles";
+import { useContentRoom } from "@/features/ui/table/useContentRoom";
 import { useShownRows } from "@/features/ui/table/useShownRows";
-import { sizes } from "@/features/ui/theme";
 import { unseen } from "@/features/ui/unseen";
 import { shelfScale } from "./shelfScale";
 import type { ShelfSort } from "./shelfView";
@@ -22,7 +21,7 @@ export interface SongTableProps extends SongRowsProps {
 export function SongTable({ songs, total, more, voice, mineOf, fitOf, actions, sort, onSort }: SongTableProps) {
   const keys = useMemo(() => songs.map(({ id }) => id), [songs]);
   const { frame, ...shown } = useShownRows(keys, 60, more);
-  const room = Math.min(sizes.content, useWindowDimensions().width - sizes.rail - 2 * sizes.gutterWide);
+  const room = useContentRoom();
   const roomy = room >= 1100;
   const scale = voice && shelfScale(voice);
   const span = scale ? Math.min(roomy ? 300 : 200, keySpanWidth(scale, 9)) : 0;

@@ -2,50 +2,40 @@ import { memo, useMemo, useState } from "react";
 import { View } from "react-native";
 import { Text } from "@/features/ui/Text";
 import { colors } from "@/features/ui/theme";
+import { ShownCards } from "@/features/ui/table/ShownCards";
 import { useShownRows } from "@/features/ui/table/useShownRows";
 import { GiveTick, OneKey, PartBand, PartFit, PartKey, PartNote, PartWay } from "./AssignCells";
 import type { AssignRowsProps, CellsProps } from "./assignRows";
-
-const nothing = () => undefined;
 
 /** The same as cards under one another, for the phone and middle screens. */
 export function AssignList({ parts, ways, onDraft, oneKey = false, scale }: AssignRowsProps) {
   const [width, setWidth] = useState(0);
   const keys = useMemo(() => parts.map(({ row }) => row.memberId), [parts]);
-  const { frame, rows, before, after, measure } = useShownRows(keys, 220, nothing);
+  const shown = useShownRows(keys, 220);
   return (
     <View onLayout={({ nativeEvent }) => setWidth(Math.min(560, Math.floor(nativeEvent.layout.width)))}>
-      <div
-        ref={frame}
-        role="list"
-        data-testid="assign-table"
-        style={{ paddingTop: before, paddingBottom: after, borderTop: `1.5px solid ${colors.ink}` }}
+      <ShownCards
+        {...shown}
+        total={parts.length}
+        testID="assign-table"
+        cardTestID="assign-row"
+        style={{ borderTop: `1.5px solid ${colors.ink}` }}
+        cardStyle={{ padding: "8px 0" }}
       >
-        {rows.map(({ index, key }) => {
+        {(index) => {
           const part = parts[index];
-          return (
-            part && (
-              <div
-                key={key}
-                ref={measure}
-                data-index={index}
-                data-testid="assign-row"
-                role="listitem"
-                style={{ borderBottom: `1px solid ${colors.line}`, padding: "8px 0" }}
-              >
-                <Card
-                  part={part}
-                  ways={ways.get(part.row.memberId)}
-                  onDraft={onDraft}
-                  oneKey={oneKey}
-                  scale={scale}
-                  width={width}
-                />
-              </div>
-            )
-          );
-        })}
-      </div>
+          return part ? (
+            <Card
+              part={part}
+              ways={ways.get(part.row.memberId)}
+              onDraft={onDraft}
+              oneKey={oneKey}
+              scale={scale}
+              width={width}
+            />
+          ) : null;
+        }}
+      </ShownCards>
     </View>
   );
 }

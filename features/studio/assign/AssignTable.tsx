@@ -1,19 +1,17 @@
 import { memo, useMemo, type CSSProperties } from "react";
-import { useWindowDimensions } from "react-native";
 import { SpanScale } from "@/features/span/SpanScale";
 import { stripX } from "@/features/span/VoiceStrip";
 import { ShownRows } from "@/features/ui/table/ShownRows";
 import { cell, stuckHead, table } from "@/features/ui/table/tableStyles";
+import { useContentRoom } from "@/features/ui/table/useContentRoom";
 import { useShownRows } from "@/features/ui/table/useShownRows";
-import { fonts, sizes } from "@/features/ui/theme";
+import { fonts } from "@/features/ui/theme";
 import { unseen } from "@/features/ui/unseen";
 import { useLayout } from "@/features/ui/useLayout";
 import { bandsWidth, rosterScale } from "../roster/rosterScale";
 import { GiveTick, OneKey, PartBand, PartFit, PartKey, PartNote, PartWay } from "./AssignCells";
 import { AssignList } from "./AssignList";
 import type { AssignRowsProps, AssignTableProps, CellsProps } from "./assignRows";
-
-const nothing = () => undefined;
 
 /** Every pupil with key and way as proposed; what is changed here is what is given. */
 export function AssignTable(props: AssignTableProps) {
@@ -31,8 +29,8 @@ const taken = Object.values(columns).reduce((sum, each) => sum + each, 0);
 
 function Wide({ parts, ways, onDraft, oneKey = false, scale }: AssignRowsProps) {
   const keys = useMemo(() => parts.map(({ row }) => row.memberId), [parts]);
-  const { frame, ...shown } = useShownRows(keys, 57, nothing);
-  const room = Math.min(sizes.content, useWindowDimensions().width - sizes.rail - 2 * sizes.gutterWide);
+  const { frame, ...shown } = useShownRows(keys, 57);
+  const room = useContentRoom();
   const width = bandsWidth(scale, Math.max(200, Math.min(340, room - taken - 250)));
   return (
     <div ref={frame}>

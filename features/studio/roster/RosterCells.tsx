@@ -3,8 +3,9 @@ import { memo, type CSSProperties, type ReactNode } from "react";
 import { SpanBar } from "@/features/span/SpanBar";
 import type { Scale } from "@/features/span/ladderGeometry";
 import { setSigns } from "@/features/ui/textSigns";
+import { BlankCell } from "@/features/ui/table/BlankCell";
+import { cell } from "@/features/ui/table/tableStyles";
 import { colors, fonts } from "@/features/ui/theme";
-import { unseen } from "@/features/ui/unseen";
 import { webStyle } from "@/features/ui/webStyle";
 import type { RosterRow } from "@/shared/contract/studio/roster";
 import { glyphs } from "@/shared/music/pitch";
@@ -45,7 +46,7 @@ export const RosterCells = memo(function RosterCells({ row, scale, width, now }:
                 </span>
               </>
             ) : (
-              <Blank words="no instrument yet" />
+              <BlankCell words="no instrument yet" />
             )}
           </td>
           <td style={{ ...td, padding: 0, lineHeight: 0 }}>
@@ -61,7 +62,7 @@ export const RosterCells = memo(function RosterCells({ row, scale, width, now }:
                 {dayOf(row.lastTake.at, now)}
               </span>
             ) : (
-              <Blank words="no take yet" />
+              <BlankCell words="no take yet" />
             )}
           </td>
           <td style={{ ...td, padding: 0, font: `500 13px/16px ${fonts.text}` }}>
@@ -88,7 +89,7 @@ export function Band({ row, scale, width }: Pick<RosterCellsProps, "row" | "scal
 /** The newest open song in the pupil's key, and how many more there are. */
 export function Assigned({ row, now }: Pick<RosterCellsProps, "row" | "now">) {
   const [newest] = row.open;
-  if (!newest) return <Blank words="nothing assigned" />;
+  if (!newest) return <BlankCell words="nothing assigned" />;
   const more = row.openCount - 1;
   return (
     <Link
@@ -127,22 +128,5 @@ export function LookAfter({ row }: { row: RosterRow }) {
   return <>{words}</>;
 }
 
-function Blank({ words }: { words: string }) {
-  return (
-    <>
-      <span aria-hidden style={{ color: colors.inkSoft }}>
-        –
-      </span>
-      <span style={unseen}>{words}</span>
-    </>
-  );
-}
-
-const td: CSSProperties = {
-  borderBottom: `1px solid ${colors.line}`,
-  padding: "0 12px 0 0",
-  height: 39,
-  verticalAlign: "middle",
-  overflowWrap: "anywhere",
-};
+const td: CSSProperties = { ...cell, height: 39 };
 const clip: CSSProperties = { display: "block", overflow: "hidden", textOverflow: "ellipsis", whiteSpace: "nowrap" };

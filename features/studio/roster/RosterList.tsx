@@ -4,6 +4,7 @@ import { SpanScale } from "@/features/span/SpanScale";
 import { stripX } from "@/features/span/VoiceStrip";
 import { Text } from "@/features/ui/Text";
 import { colors, fonts } from "@/features/ui/theme";
+import { ShownCards } from "@/features/ui/table/ShownCards";
 import { useShownRows } from "@/features/ui/table/useShownRows";
 import { dayOf } from "../dayWords";
 import { EffortBars } from "./EffortBars";
@@ -11,13 +12,11 @@ import { Assigned, Band, LookAfter, type RosterCellsProps } from "./RosterCells"
 import type { RosterRowsProps } from "./RosterTable";
 import { silence, tuningWords } from "./rosterWords";
 
-const nothing = () => undefined;
-
 /** The pupils as cards under one another, for the phone and middle screens; their bands on one scale. */
 export function RosterList({ rows: pupils, scale, now }: RosterRowsProps) {
   const [width, setWidth] = useState(0);
   const keys = useMemo(() => pupils.map(({ memberId }) => memberId), [pupils]);
-  const { frame, rows, before, after, measure } = useShownRows(keys, 132, nothing);
+  const shown = useShownRows(keys, 132);
   return (
     <View onLayout={({ nativeEvent }) => setWidth(Math.min(560, Math.floor(nativeEvent.layout.width)))}>
       {width > 0 && (
@@ -25,27 +24,12 @@ export function RosterList({ rows: pupils, scale, now }: RosterRowsProps) {
           <SpanScale scale={scale} width={width} x={(midi) => stripX(midi, scale, width)} />
         </div>
       )}
-      <div ref={frame} role="list" data-testid="roster" style={{ paddingTop: before, paddingBottom: after }}>
-        {rows.map(({ index, key }) => {
+      <ShownCards {...shown} total={pupils.length} testID="roster" cardTestID="pupil" cardStyle={{ padding: "12px 0" }}>
+        {(index) => {
           const row = pupils[index];
-          return (
-            row && (
-              <div
-                key={key}
-                ref={measure}
-                data-index={index}
-                data-testid="pupil"
-                role="listitem"
-                aria-posinset={index + 1}
-                aria-setsize={pupils.length}
-                style={{ borderBottom: `1px solid ${colors.line}`, padding: "12px 0" }}
-              >
-                <Pupil row={row} scale={scale} width={width} now={now} />
-              </div>
-            )
-          );
-        })}
-      </div>
+          return row ? <Pupil row={row} scale={scale} width={width} now={now} /> : null;
+        }}
+      </ShownCards>
     </View>
   );
 }

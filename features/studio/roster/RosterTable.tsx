@@ -1,13 +1,12 @@
 import { useMemo, type ReactNode } from "react";
-import { useWindowDimensions } from "react-native";
 import type { Scale } from "@/features/span/ladderGeometry";
 import { SpanScale } from "@/features/span/SpanScale";
 import { stripX } from "@/features/span/VoiceStrip";
 import { ShownRows } from "@/features/ui/table/ShownRows";
 import { SortHead } from "@/features/ui/table/SortHead";
 import { table } from "@/features/ui/table/tableStyles";
+import { useContentRoom } from "@/features/ui/table/useContentRoom";
 import { useShownRows } from "@/features/ui/table/useShownRows";
-import { sizes } from "@/features/ui/theme";
 import { unseen } from "@/features/ui/unseen";
 import type { RosterRow } from "@/shared/contract/studio/roster";
 import { RosterCells } from "./RosterCells";
@@ -26,7 +25,6 @@ export interface RosterTableProps extends RosterRowsProps {
   onSort: (sort: RosterSort) => void;
 }
 
-const nothing = () => undefined;
 /** px: pupil, instrument, band, assigned, last take; the last column takes the rest. */
 const columns = { pupil: 128, instrument: 132, bands: 454, assigned: 206, take: 158, look: 150 } as const;
 const roomLeft = columns.pupil + columns.instrument + columns.assigned + columns.take + columns.look;
@@ -34,8 +32,8 @@ const roomLeft = columns.pupil + columns.instrument + columns.assigned + columns
 /** The pupils as a table, for wide screens: all voices stand on one scale, so that the eye compares down the column. */
 export function RosterTable({ rows: pupils, scale, now, sort, onSort }: RosterTableProps) {
   const keys = useMemo(() => pupils.map(({ memberId }) => memberId), [pupils]);
-  const { frame, ...shown } = useShownRows(keys, 40, nothing);
-  const room = Math.min(sizes.content, useWindowDimensions().width - sizes.rail - 2 * sizes.gutterWide);
+  const { frame, ...shown } = useShownRows(keys, 40);
+  const room = useContentRoom();
   const width = bandsWidth(scale, Math.max(220, Math.min(columns.bands, room - roomLeft)));
   const column = (by: RosterSort | null, label: string, under?: ReactNode) => {
     const way = by === "take" ? "descending" : "ascending";

@@ -15,8 +15,8 @@ export interface ShownRows {
 /** How near the end the next page is asked for, in rows. */
 const ahead = 30;
 
-/** The rows of a long list that are in sight, with some to spare; all of them on paper. */
-export function useShownRows(keys: readonly string[], height: number, more: () => void): ShownRows {
+/** The rows of a long list that are in sight, with some to spare; all of them on paper. `more` fetches what follows. */
+export function useShownRows(keys: readonly string[], height: number, more?: () => void): ShownRows {
   const frame = useRef<HTMLDivElement>(null);
   const top = useTopOf(frame, keys);
   const printing = useSyncExternalStore(onPrint, isPrinting, () => false);
@@ -38,7 +38,7 @@ export function useShownRows(keys: readonly string[], height: number, more: () =
     asked.current = more;
   });
   useEffect(() => {
-    if (keys.length > 0 && last >= keys.length - ahead) asked.current();
+    if (keys.length > 0 && last >= keys.length - ahead) asked.current?.();
   }, [last, keys.length]);
   if (printing)
     return {

@@ -91,3 +91,9 @@ export function aPart(change: Partial<Part> = {}): Part {
     ...change,
   };
 }
+
+/** What the server says of a guardian where nobody was asked. */
+export const noGuardian = {
+  ...{ needed: true, age: 16, email: null, askedAt: null },
+  ...{ confirmedAt: null, withdrawnAt: null, refusedAt: null },
+};

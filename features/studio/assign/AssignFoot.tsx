@@ -3,6 +3,7 @@ import { Button } from "@/features/ui/Button";
 import { LiveText } from "@/features/ui/LiveText";
 import { Notice } from "@/features/ui/Notice";
 import { plural } from "@/shared/music/countWords";
+import { searchWords } from "./useWaysOfParts";
 
 export interface AssignFootProps {
   chosen: number;
@@ -36,7 +37,7 @@ export function AssignFoot({ chosen, searching, sending, error, onSend }: Assign
         testID="give"
       />
       <LiveText variant="small" tone="soft">
-        {searching > 0 ? `Working out the ways: ${chosen - searching} of ${chosen} are found.` : ""}
+        {searchWords(searching, chosen)}
       </LiveText>
     </View>
   );

@@ -2,48 +2,29 @@ import { useQuery } from "@tanstack/react-query";
 import { type Href, useRouter } from "expo-router";
 import { useState } from "react";
 import { View } from "react-native";
-import { EmptyState } from "@/features/ui/EmptyState";
 import { Field } from "@/features/ui/Field";
-import { LinkButton } from "@/features/ui/LinkButton";
 import { Notice } from "@/features/ui/Notice";
 import { QueryState } from "@/features/ui/QueryState";
-import { Select } from "@/features/ui/Select";
 import { Text } from "@/features/ui/Text";
 import { useLayout } from "@/features/ui/useLayout";
 import type { RosterRow } from "@/shared/contract/studio/roster";
 import type { Studio } from "@/shared/contract/studio/studio";
-import type { Instrument } from "@/shared/instruments/instrument";
-import type { KeyName } from "@/shared/music/keyName";
 import { keySign } from "@/shared/music/keyWords";
 import { glyphs } from "@/shared/music/pitch";
-import type { Way } from "@/shared/ways/way";
 import { DayField } from "../DayField";
 import type { Piece } from "../judge/piece";
 import { pupilsOf } from "../roster/rosterView";
+import { EmptyShelf, SongSelect, type SongSelectProps } from "../SongSelect";
 import { studioQueries } from "../studioQueries";
 import { AssignFoot } from "./AssignFoot";
 import { AssignTable } from "./AssignTable";
+import type { PartsOf } from "./pupilParts";
 import { WhoControls } from "./WhoControls";
 import { useAssignment } from "./useAssignment";
+import { useWaysOfParts, type UseWays } from "./useWaysOfParts";
 
-/** A song on one pupil's instrument. */
-interface WantedWays {
-  piece: Piece;
-  instrument: Instrument;
-  wishes: RosterRow["wishes"];
-}
-
-/** The search for ways, as the feature that owns it offers it: undefined while it is searched, null where there is none. */
-export type UseWays = (
-  wanted: readonly { playing: WantedWays | null; to: KeyName }[],
-) => readonly (readonly Way[] | null | undefined)[];
-
-export interface AssignScreenProps {
+export interface AssignScreenProps extends Omit<SongSelectProps, "testID"> {
   studio: Studio;
-  /** the teacher's own songs */
-  songs: readonly { id: string; title: string }[];
-  songId: string | null;
-  onSong: (id: string) => void;
   /** the chosen song, ready to be judged; null while it is not here or has no key */
   piece: Piece | null;
   /** tonic of one key for everybody, where the teacher came with one */
@@ -51,34 +32,18 @@ export interface AssignScreenProps {
   /** members chosen from the start; null: everybody */
   group: string | null;
   useWays: UseWays;
-  instrumentOf: (own: NonNullable<RosterRow["instrument"]>) => Instrument;
+  instrumentOf: PartsOf["instrumentOf"];
 }
 
 /** Gives one song to many: for each pupil a key and a way from their own voice and instrument, changed in the same table. */
 export function AssignScreen(props: AssignScreenProps) {
   const { studio, songs, songId, onSong, piece } = props;
   const roster = useQuery(studioQueries.roster(studio.id));
-  if (songs.length === 0)
-    return (
-      <EmptyState
-        title="Your shelf is empty"
-        text="Songs are given from your own shelf. Add one first."
-        action={<LinkButton label="Add a song" href="/songs/new" />}
-      />
-    );
+  if (songs.length === 0) return <EmptyShelf text="Songs are given from your own shelf. Add one first." />;
   return (
     <View style={{ gap: 20 }}>
       <View style={{ maxWidth: 560 }}>
-        <Select
-          label="Song, from your shelf"
-          options={[
-            ...(songId === null ? [{ value: "", label: "Choose a song" }] : []),
-            ...songs.map(({ id, title }) => ({ value: id, label: title })),
-          ]}
-          value={songId ?? ""}
-          onChange={(id) => id !== "" && onSong(id)}
-          testID="assign-song"
-        />
+        <SongSelect songs={songs} songId={songId} onSong={onSong} testID="assign-song" />
       </View>
       {songId !== null && piece === null && (
         <Notice kind="caution">
@@ -105,14 +70,7 @@ function Assigning({ studio, piece, pupils, asked, group, useWays, instrumentOf 
   const work = useAssignment({ studioId: studio.id, piece, pupils, asked, group, instrumentOf });
   const [dueOn, setDueOn] = useState("");
   const [note, setNote] = useState("");
-  const found = useWays(
-    work.parts.map(({ draft, key, instrument, row }) => ({
-      playing: draft.chosen && instrument && piece.chords.length > 0 ? { piece, instrument, wishes: row.wishes } : null,
-      to: { tonic: key.tonic, mode: piece.written.mode },
-    })),
-  );
-  const ways = new Map(work.parts.map(({ row }, k) => [row.memberId, found[k]] as const));
-  const open = found.filter((each) => each === undefined).length;
+  const { ways, searching } = useWaysOfParts(useWays, piece, work.parts);
   const send = () =>
     work.give({ dueOn: dueOn === "" ? null : dueOn, note: note.trim(), waysOf: (id) => ways.get(id) }, (id) =>
       router.replace(`/studio/${studio.id}/assignments/${id}` as Href),
@@ -145,7 +103,7 @@ function Assigning({ studio, piece, pupils, asked, group, useWays, instrumentOf 
           />
         </View>
       </View>
-      <AssignFoot chosen={work.chosen} searching={open} sending={work.sending} error={work.error} onSend={send} />
+      <AssignFoot chosen={work.chosen} searching={searching} sending={work.sending} error={work.error} onSend={send} />
       <Text variant="small" tone="soft" style={{ maxWidth: 640 }}>
         Each pupil gets a copy of the song on their own shelf, with the key and the way you set here, and a mail.
         Nothing else of your shelf is seen.

@@ -1,15 +1,15 @@
 import { useQuery } from "@tanstack/react-query";
-import { useCallback, useMemo, useState } from "react";
+import { useCallback, useMemo } from "react";
 import { http } from "@/features/api/httpClient";
 import { useSentId } from "@/features/api/useSentId";
 import type { Assignment, AssignmentRequest } from "@/shared/contract/studio/assignment";
 import type { RosterRow } from "@/shared/contract/studio/roster";
-import type { Instrument } from "@/shared/instruments/instrument";
 import type { Way } from "@/shared/ways/way";
 import { pupilKeys } from "../judge/askPupilKeys";
 import { questionOf, type Piece } from "../judge/piece";
 import { useStudioChange } from "../studioQueries";
-import { partRequest, pupilParts, untouched, type PartDraft, type PupilPart } from "./pupilParts";
+import { partRequest, pupilParts, untouched, type PartsOf, type PupilPart } from "./pupilParts";
+import { useDrafts } from "./useDrafts";
 
 export interface AssignmentOf {
   studioId: string;
@@ -17,7 +17,7 @@ export interface AssignmentOf {
   pupils: readonly RosterRow[];
   asked: string | null;
   group: string | null;
-  instrumentOf: (own: NonNullable<RosterRow["instrument"]>) => Instrument;
+  instrumentOf: PartsOf["instrumentOf"];
 }
 
 interface Given {
@@ -28,7 +28,7 @@ interface Given {
 
 /** The table of an assignment while it is made: what is proposed, what the teacher changes, and giving it out. */
 export function useAssignment({ studioId, piece, pupils, asked, group, instrumentOf }: AssignmentOf) {
-  const [drafts, setDrafts] = useState<ReadonlyMap<string, PartDraft>>(
+  const { drafts, setDrafts, change } = useDrafts(
     () =>
       new Map(
         pupils
@@ -42,11 +42,6 @@ export function useAssignment({ studioId, piece, pupils, asked, group, instrumen
     () => pupilParts({ written: piece.written, pupils, judged: judged.data, drafts, asked, instrumentOf }),
     [piece, pupils, judged.data, drafts, asked, instrumentOf],
   );
-  const change = useCallback(
-    (memberId: string, draft: Partial<PartDraft>) =>
-      setDrafts((before) => new Map(before).set(memberId, { ...(before.get(memberId) ?? untouched), ...draft })),
-    [],
-  );
   const choose = useCallback(
     (ids: ReadonlySet<string>) =>
       setDrafts(
@@ -58,7 +53,7 @@ export function useAssignment({ studioId, piece, pupils, asked, group, instrumen
             ]),
           ),
       ),
-    [pupils],
+    [pupils, setDrafts],
   );
   const send = useStudioChange((request: AssignmentRequest) =>
     http.post<Assignment>(`/studios/${studioId}/assignments`, request),

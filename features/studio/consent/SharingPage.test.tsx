@@ -1,7 +1,7 @@
 import { QueryClientProvider } from "@tanstack/react-query";
 import { fireEvent, render, screen, waitFor } from "@testing-library/react";
 import { Answers } from "@/__tests__/client/answers";
-import { asPupil, aStudio, studioId } from "@/__tests__/client/studioPeople";
+import { asPupil, aStudio, noGuardian, studioId } from "@/__tests__/client/studioPeople";
 import { queryClient } from "@/features/api/queryClient";
 import { ThemeProvider } from "@/features/ui/ThemeProvider";
 import { SharingPage } from "./SharingPage";
@@ -11,15 +11,7 @@ jest.mock("expo-router", () => ({
   Link: ({ href, children }: { href: string; children: React.ReactNode }) => <a href={href}>{children}</a>,
 }));
 
-const alone = {
-  needed: false,
-  age: 16,
-  email: null,
-  askedAt: null,
-  confirmedAt: null,
-  withdrawnAt: null,
-  refusedAt: null,
-};
+const alone = { ...noGuardian, needed: false };
 let server: Answers;
 
 beforeEach(() => {

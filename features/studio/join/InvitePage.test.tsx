@@ -1,7 +1,7 @@
 import { QueryClientProvider } from "@tanstack/react-query";
 import { act, fireEvent, render, screen } from "@testing-library/react";
 import { Answers } from "@/__tests__/client/answers";
-import { asPupil } from "@/__tests__/client/studioPeople";
+import { asPupil, noGuardian } from "@/__tests__/client/studioPeople";
 import { queryClient } from "@/features/api/queryClient";
 import { session } from "@/features/api/session";
 import { SessionProvider } from "@/features/api/SessionProvider";
@@ -18,15 +18,6 @@ const look = {
   ...{ studio: "Tuesday evening class", teacher: "Rhona Teale", teachers: ["Rhona Teale"], role: "pupil" },
   ...{ email: "maren@orlow.example", sees: ["Your name in this studio.", "The takes you hand in."] },
   ...{ recordingsKeptDays: 90, expiresAt: "2026-12-08T18:00:00.000Z" },
-};
-const unasked = {
-  needed: true,
-  age: 16,
-  email: null,
-  askedAt: null,
-  confirmedAt: null,
-  withdrawnAt: null,
-  refusedAt: null,
 };
 let server: Answers;
 
@@ -100,7 +91,7 @@ it("asks for the year of birth where one agrees, then joins with what was chosen
 
 it("asks those who are too young for a guardian's address, and says that nothing is shared until then", async () => {
   server.to("POST /invites/accept", asPupil({ shares: false, waitsForGuardian: true })).to("POST /guardian", {}, 202);
-  server.to("GET /guardian", unasked);
+  server.to("GET /guardian", noGuardian);
   await open();
   await screen.findByTestId("join-name");
   type("join-name", "Cass Wether");
@@ -117,7 +108,7 @@ it("asks those who are too young for a guardian's address, and says that nothing
 
 it("asks for no address where a guardian is known and has the mail already", async () => {
   server.to("POST /invites/accept", asPupil({ shares: false, waitsForGuardian: true }));
-  server.to("GET /guardian", { ...unasked, email: "parent@orlow.example", askedAt: "2026-12-01T18:00:00.000Z" });
+  server.to("GET /guardian", { ...noGuardian, email: "parent@orlow.example", askedAt: "2026-12-01T18:00:00.000Z" });
   await open();
   await screen.findByTestId("join-name");
   type("join-name", "Cass Wether");

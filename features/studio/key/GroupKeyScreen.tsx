@@ -15,9 +15,18 @@ import type { RosterRow } from "@/shared/contract/studio/roster";
 import type { Studio } from "@/shared/contract/studio/studio";
 import { keySign } from "@/shared/music/keyWords";
 import { glyphs } from "@/shared/music/pitch";
-import type { UseWays } from "../assign/AssignScreen";
 import { AssignTable } from "../assign/AssignTable";
-import { partWay, pupilParts, untouched, wayMark, type PartDraft, type PartsOf } from "../assign/pupilParts";
+import {
+  partRequest,
+  partWay,
+  pupilParts,
+  untouched,
+  wayMark,
+  type PartsOf,
+  type PupilPart,
+} from "../assign/pupilParts";
+import { useDrafts } from "../assign/useDrafts";
+import { searchWords, useWaysOfParts, type UseWays, type WaysOfParts } from "../assign/useWaysOfParts";
 import { pupilKeys } from "../judge/askPupilKeys";
 import type { ClassKey, PupilsJudged } from "../judge/judgePupils";
 import { questionOf, type Piece } from "../judge/piece";
@@ -69,7 +78,7 @@ function Judged(props: JudgedProps) {
   const { piece, pupils } = props;
   const singers = useMemo(() => pupils.filter(({ voice }) => voice !== null), [pupils]);
   const question = useMemo(() => questionOf(piece, singers), [piece, singers]);
-  const judged = useQuery(pupilKeys(question));
+  const answer = useQuery(pupilKeys(question));
   if (question === null)
     return (
       <Notice kind="caution" title="Nothing is known of the tune">
@@ -85,7 +94,7 @@ function Judged(props: JudgedProps) {
       />
     );
   return (
-    <QueryState query={judged} title="The keys could not be worked out">
+    <QueryState query={answer} title="The keys could not be worked out">
       {(found) => <Keys {...props} singers={singers} judged={found} silent={pupils.length - singers.length} />}
     </QueryState>
   );
@@ -100,25 +109,24 @@ interface KeysProps extends JudgedProps {
 
 function Keys({ studio, piece, group, singers, judged, silent, useWays, instrumentOf }: KeysProps) {
   const [tonic, setTonic] = useState<string | null>(null);
-  const [drafts, setDrafts] = useState<ReadonlyMap<string, PartDraft>>(new Map());
+  const { drafts, setDrafts, change } = useDrafts(() => new Map());
   const picked = judged.together.find((key) => key.tonic === tonic) ?? judged.together[0]!;
   const { written } = piece;
-  const parts = pupilParts({
-    ...{ written, pupils: singers, judged, asked: picked.tonic, instrumentOf },
-    drafts: new Map(
-      singers.map(({ memberId }) => [memberId, { ...(drafts.get(memberId) ?? untouched), chosen: true, shift: null }]),
-    ),
-  });
-  const to = { tonic: picked.tonic, mode: written.mode };
-  const found = useWays(
-    parts.map(({ instrument, row }) => ({
-      playing: instrument && piece.chords.length > 0 ? { piece, instrument, wishes: row.wishes } : null,
-      to,
-    })),
+  const parts = useMemo(
+    () =>
+      pupilParts({
+        ...{ written, pupils: singers, judged, asked: picked.tonic, instrumentOf },
+        drafts: new Map(
+          singers.map(({ memberId }) => [
+            memberId,
+            { ...(drafts.get(memberId) ?? untouched), chosen: true, shift: null },
+          ]),
+        ),
+      }),
+    [written, singers, judged, picked.tonic, instrumentOf, drafts],
   );
-  const ways = new Map(parts.map(({ row }, k) => [row.memberId, found[k]] as const));
-  const searching = found.filter((each) => each === undefined).length;
-  const sign = glyphs(keySign(to));
+  const { ways, searching } = useWaysOfParts(useWays, piece, parts);
+  const sign = glyphs(keySign({ tonic: picked.tonic, mode: written.mode }));
   const keep = useStudioChange((key: GroupKey) => http.put(`/studios/${studio.id}/groups/${group?.id}/key`, key));
   const body = (): GroupKey => ({
     songId: piece.song.id,
@@ -126,14 +134,8 @@ function Keys({ studio, piece, group, singers, judged, silent, useWays, instrume
     tonic: picked.tonic,
     reason: picked.reason,
     pupils: parts.map((part) => {
-      const way = partWay(part, ways.get(part.row.memberId));
-      return {
-        memberId: part.row.memberId,
-        shift: part.key.shift,
-        score: part.key.judged?.score ?? null,
-        instrument: part.instrument && { id: part.instrument.id, name: part.instrument.name },
-        way: way && { retune: way.retune, capo: way.capo, shapeKey: way.shapeKey },
-      };
+      const { memberId, shift, score, instrument, way } = partRequest(part, ways.get(part.row.memberId));
+      return { memberId, shift, score, instrument, way };
     }),
     decidedAt: new Date().toISOString(),
   });
@@ -187,19 +189,12 @@ function Keys({ studio, piece, group, singers, judged, silent, useWays, instrume
           judged.coarse && "Coarse: only the lowest and highest note of the tune are known.",
           silent > 0 &&
             `${silent === 1 ? "One pupil is" : `${silent} pupils are`} left out: no voice is known of them.`,
-          searching > 0 && `Working out the ways: ${parts.length - searching} of ${parts.length} are found.`,
+          searchWords(searching, parts.length),
         ]
           .filter(Boolean)
           .join(" ")}
       </LiveText>
-      <AssignTable
-        oneKey
-        parts={parts}
-        ways={ways}
-        onDraft={(memberId, draft) =>
-          setDrafts((before) => new Map(before).set(memberId, { ...(before.get(memberId) ?? untouched), ...draft }))
-        }
-      />
+      <AssignTable oneKey parts={parts} ways={ways} onDraft={change} />
       {!group && (
         <Text variant="small" tone="soft">
           Choose a group to keep the key for it, with each pupil’s way.
@@ -213,8 +208,8 @@ function isKept(
   group: StudioGroup | null,
   piece: Piece,
   picked: ClassKey,
-  parts: ReturnType<typeof pupilParts>,
-  ways: ReadonlyMap<string, Parameters<typeof partWay>[1]>,
+  parts: readonly PupilPart[],
+  ways: WaysOfParts["ways"],
 ): boolean {
   const before = group?.keys.find(({ songId }) => songId === piece.song.id);
   if (!before || before.tonic !== picked.tonic || before.pupils.length !== parts.length) return false;

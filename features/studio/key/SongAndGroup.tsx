@@ -1,16 +1,12 @@
 import { View } from "react-native";
-import { EmptyState } from "@/features/ui/EmptyState";
-import { LinkButton } from "@/features/ui/LinkButton";
 import { Notice } from "@/features/ui/Notice";
 import { Select } from "@/features/ui/Select";
 import { useLayout } from "@/features/ui/useLayout";
 import type { StudioGroup } from "@/shared/contract/studio/group";
 import type { Piece } from "../judge/piece";
+import { EmptyShelf, SongSelect, type SongSelectProps } from "../SongSelect";
 
-export interface SongAndGroupProps {
-  songs: readonly { id: string; title: string }[];
-  songId: string | null;
-  onSong: (id: string) => void;
+export interface SongAndGroupProps extends Omit<SongSelectProps, "testID"> {
   piece: Piece | null;
   groups: readonly StudioGroup[];
   groupId: string | null;
@@ -20,29 +16,13 @@ export interface SongAndGroupProps {
 /** Which song, and who sings it together. */
 export function SongAndGroup({ songs, songId, onSong, piece, groups, groupId, onGroup }: SongAndGroupProps) {
   const phone = useLayout() === "phone";
-  if (songs.length === 0)
-    return (
-      <EmptyState
-        title="Your shelf is empty"
-        text="Keys are found for songs of your own shelf. Add one first."
-        action={<LinkButton label="Add a song" href="/songs/new" />}
-      />
-    );
+  if (songs.length === 0) return <EmptyShelf text="Keys are found for songs of your own shelf. Add one first." />;
   const half = phone ? null : { flexGrow: 1, flexBasis: 0, maxWidth: 420 };
   return (
     <View style={{ gap: 12 }}>
       <View style={{ flexDirection: phone ? "column" : "row", gap: 12 }}>
         <View style={half}>
-          <Select
-            label="Song, from your shelf"
-            options={[
-              ...(songId === null ? [{ value: "", label: "Choose a song" }] : []),
-              ...songs.map(({ id, title }) => ({ value: id, label: title })),
-            ]}
-            value={songId ?? ""}
-            onChange={(id) => id !== "" && onSong(id)}
-            testID="key-song"
-          />
+          <SongSelect songs={songs} songId={songId} onSong={onSong} testID="key-song" />
         </View>
         <View style={half}>
           <Select

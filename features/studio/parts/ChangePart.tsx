@@ -11,8 +11,8 @@ import { QueryState } from "@/features/ui/QueryState";
 import type { Part, PartChange } from "@/shared/contract/studio/assignment";
 import type { RosterRow } from "@/shared/contract/studio/roster";
 import { PartFit, PartKey, PartWay } from "../assign/AssignCells";
-import type { UseWays } from "../assign/AssignScreen";
 import { partRequest, pupilParts, wayMark, type PartDraft, type PartsOf } from "../assign/pupilParts";
+import { useWaysOfParts, type UseWays } from "../assign/useWaysOfParts";
 import { pupilKeys } from "../judge/askPupilKeys";
 import { questionOf, type Piece } from "../judge/piece";
 import { studioQueries, useStudioChange } from "../studioQueries";
@@ -72,30 +72,24 @@ function Changing({ part, piece, row, useWays, instrumentOf, onDone }: ChangingP
   });
   const question = useMemo(() => questionOf(piece, [row]), [piece, row]);
   const judged = useQuery(pupilKeys(question)).data;
-  const [changed] = pupilParts({
+  const changed = pupilParts({
     ...{ written: piece.written, pupils: [row], judged, asked: part.tonic, instrumentOf },
     drafts: new Map([[row.memberId, draft]]),
-  });
-  const { instrument, key } = changed!;
-  const [ways] = useWays([
-    {
-      playing: instrument && piece.chords.length > 0 ? { piece, instrument, wishes: row.wishes } : null,
-      to: { tonic: key.tonic, mode: piece.written.mode },
-    },
-  ]);
+  })[0]!;
+  const ways = useWaysOfParts(useWays, piece, [changed]).ways.get(row.memberId);
   const save = useStudioChange((change: PartChange) => http.put<Part>(`/parts/${part.id}`, change));
   const keep = () => {
-    const { tonic, shift, instrument: on, way, note } = partRequest(changed!, ways);
+    const { tonic, shift, instrument: on, way, note } = partRequest(changed, ways);
     save.mutate({ tonic, shift, instrument: on, way, partNote: note }, { onSuccess: onDone });
   };
   const change = (_memberId: string, next: Partial<PartDraft>) => setDraft((before) => ({ ...before, ...next }));
   return (
     <>
       <View style={{ flexDirection: "row", flexWrap: "wrap", alignItems: "center", columnGap: 16, minHeight: 48 }}>
-        <PartKey part={changed!} onDraft={change} />
-        <PartFit part={changed!} />
+        <PartKey part={changed} onDraft={change} />
+        <PartFit part={changed} />
       </View>
-      <PartWay part={changed!} ways={ways} onDraft={change} />
+      <PartWay part={changed} ways={ways} onDraft={change} />
       <Field
         label={`Note to ${part.pupil}`}
         value={draft.note}

@@ -1,6 +1,7 @@
 import type { CSSProperties } from "react";
 import { KeySpan } from "@/features/span/KeySpan";
 import { keySpanWidth, keySpanX } from "@/features/span/keySpanGeometry";
+import { head, table } from "@/features/ui/table/tableStyles";
 import { setSigns } from "@/features/ui/textSigns";
 import { colors, fonts } from "@/features/ui/theme";
 import { unseen } from "@/features/ui/unseen";
@@ -88,22 +89,7 @@ export function SpanTable({ picked, room }: SpanTableProps) {
 }
 
 const toneOf = { comfort: colors.inkSoft, reach: colors.honeyText, beyond: colors.brick } as const;
-const table: CSSProperties = {
-  width: "100%",
-  tableLayout: "fixed",
-  borderCollapse: "separate",
-  borderSpacing: 0,
-  font: `400 14px/18px ${fonts.text}`,
-  color: colors.ink,
-};
-const th: CSSProperties = {
-  borderBottom: `1.5px solid ${colors.ink}`,
-  font: `500 12px/16px ${fonts.text}`,
-  color: colors.inkSoft,
-  textAlign: "left",
-  verticalAlign: "bottom",
-  padding: "0 0 8px",
-};
+const th: CSSProperties = { ...head, borderBottom: `1.5px solid ${colors.ink}`, padding: "0 0 8px" };
 const td: CSSProperties = {
   padding: 0,
   borderBottom: `1px solid ${colors.line}`,

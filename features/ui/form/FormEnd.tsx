@@ -4,16 +4,12 @@ import { Button } from "../Button";
 import { LiveText } from "../LiveText";
 import { Notice } from "../Notice";
 
-/** How far the sending of a form has come. */
-interface FormProgress {
+interface FormEndProps {
   /** what was refused and belongs to no field */
   refusal: { code: string; message: string } | null;
   sending: boolean;
   /** where the refusal stands, so that it can take the focus */
   problem: RefObject<HTMLDivElement | null>;
-}
-
-interface FormEndProps extends FormProgress {
   sendLabel: string;
   busyLabel: string;
   /** a button among other cards, instead of the one of the page */

@@ -2,9 +2,10 @@ import type { Href } from "expo-router";
 import { useEffect, useRef, type ReactNode } from "react";
 import { View, type Text as NativeText } from "react-native";
 import { Heading } from "./Heading";
+import { PhoneFoot } from "./PhoneFoot";
 import { PhoneTop, WideHead, type Crumb } from "./ScreenHead";
 import { useShell } from "./ShellContext";
-import { colors, sizes } from "./theme";
+import { sizes } from "./theme";
 import { useLayout } from "./useLayout";
 import { webProps, webStyle } from "./webStyle";
 
@@ -48,7 +49,7 @@ export function Screen({
   large = false,
   children,
 }: ScreenProps) {
-  const { pathname, arrive, setBarHidden, barHidden } = useShell();
+  const { pathname, arrive, setBarHidden } = useShell();
   const phone = useLayout() === "phone";
   const heading = useRef<NativeText>(null);
   const titleNow = useRef(title);
@@ -96,24 +97,7 @@ export function Screen({
           {children}
         </View>
         {phone && foot !== undefined && foot !== null && (
-          <View
-            style={[
-              {
-                gap: 10,
-                paddingHorizontal: sizes.gutterPhone,
-                paddingTop: 8,
-                paddingBottom: 14,
-                backgroundColor: colors.paper,
-                zIndex: 1,
-              },
-              webStyle({
-                position: "sticky",
-                bottom: barHidden ? 0 : `calc(${sizes.bar}px + env(safe-area-inset-bottom))`,
-              }),
-            ]}
-          >
-            {foot}
-          </View>
+          <PhoneFoot style={{ paddingHorizontal: sizes.gutterPhone }}>{foot}</PhoneFoot>
         )}
       </View>
     </View>

@@ -2,6 +2,8 @@ import { View } from "react-native";
 import { Button } from "@/features/ui/Button";
 import { LiveText } from "@/features/ui/LiveText";
 import { Notice } from "@/features/ui/Notice";
+import { PhoneFoot } from "@/features/ui/PhoneFoot";
+import { useLayout } from "@/features/ui/useLayout";
 import { plural } from "@/shared/music/countWords";
 import { searchWords } from "./useWaysOfParts";
 
@@ -14,10 +16,11 @@ export interface AssignFootProps {
   onSend: () => void;
 }
 
-/** Gives the song out, once every chosen pupil has a way. */
+/** Gives the song out, once every chosen pupil has a way; on the phone always in reach. */
 export function AssignFoot({ chosen, searching, sending, error, onSend }: AssignFootProps) {
-  return (
-    <View style={{ gap: 8, alignItems: "flex-start" }}>
+  const phone = useLayout() === "phone";
+  const foot = (
+    <>
       {error && (
         <Notice kind="error" title="The song was not given" testID="assign-problem">
           {`${error.message} What you set here is still here.`}
@@ -39,6 +42,7 @@ export function AssignFoot({ chosen, searching, sending, error, onSend }: Assign
       <LiveText variant="small" tone="soft">
         {searchWords(searching, chosen)}
       </LiveText>
-    </View>
+    </>
   );
+  return phone ? <PhoneFoot>{foot}</PhoneFoot> : <View style={{ gap: 8, alignItems: "flex-start" }}>{foot}</View>;
 }

@@ -103,11 +103,11 @@ function Assigning({ studio, piece, pupils, asked, group, useWays, instrumentOf 
           />
         </View>
       </View>
-      <AssignFoot chosen={work.chosen} searching={searching} sending={work.sending} error={work.error} onSend={send} />
       <Text variant="small" tone="soft" style={{ maxWidth: 640 }}>
         Each pupil gets a copy of the song on their own shelf, with the key and the way you set here, and a mail.
         Nothing else of your shelf is seen.
       </Text>
+      <AssignFoot chosen={work.chosen} searching={searching} sending={work.sending} error={work.error} onSend={send} />
     </View>
   );
 }

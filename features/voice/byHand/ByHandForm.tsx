@@ -6,10 +6,9 @@ import { Field } from "@/features/ui/Field";
 import { Form } from "@/features/ui/Form";
 import { IconButton } from "@/features/ui/IconButton";
 import { Notice } from "@/features/ui/Notice";
+import { PhoneFoot } from "@/features/ui/PhoneFoot";
 import { Text } from "@/features/ui/Text";
-import { colors, sizes } from "@/features/ui/theme";
 import { useLayout } from "@/features/ui/useLayout";
-import { webStyle } from "@/features/ui/webStyle";
 import { noteName, parseNoteName } from "@/shared/music/pitch";
 import type { SingingVoice } from "@/shared/keys/keyScore";
 import { readByHand, usualComfort, type ByHandFields } from "./byHand";
@@ -162,10 +161,10 @@ export function ByHandForm({ place, voice, busy, refusal, onKeep }: ByHandFormPr
         {ladder}
         <View style={pairs}>{comfort.map(fieldOf)}</View>
         {how}
-        <View style={[{ paddingVertical: 10, gap: 10, backgroundColor: colors.paper, zIndex: 1 }, aboveBar]}>
+        <PhoneFoot>
           {refused}
           {button}
-        </View>
+        </PhoneFoot>
       </Form>
     );
   }
@@ -187,8 +186,6 @@ export function ByHandForm({ place, voice, busy, refusal, onKeep }: ByHandFormPr
 
 const pairs = { flexDirection: "row", gap: 12 } as const;
 const pair = { flexGrow: 1, flexBasis: 0 } as const;
-/** The button stays in reach of the thumb, over the bar at the foot. */
-const aboveBar = webStyle({ position: "sticky", bottom: `calc(${sizes.bar}px + env(safe-area-inset-bottom))` });
 
 function labelOf(name: keyof ByHandFields): string {
   return rows.find((row) => row.name === name)?.label ?? "";

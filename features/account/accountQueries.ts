@@ -1,6 +1,6 @@
 import { queryOptions } from "@tanstack/react-query";
 import { http } from "@/features/api/httpClient";
-import type { OpenSession, PersonFacts, SecondFactor } from "@/shared/contract/account";
+import type { OpenSession, SecondFactor } from "@/shared/contract/account";
 import type { MailPreferences } from "@/shared/contract/mail";
 
 /** What the server tells about the account of whoever is signed in. */
@@ -12,8 +12,6 @@ export const accountQueries = {
       queryKey: ["account", "second-factor"],
       queryFn: () => http.get<SecondFactor>("/account/second-factor"),
     }),
-  person: () =>
-    queryOptions({ queryKey: ["account", "person"], queryFn: () => http.get<PersonFacts>("/account/person") }),
   mail: () =>
     queryOptions({ queryKey: ["account", "mail"], queryFn: () => http.get<MailPreferences>("/mail/preferences") }),
 };

@@ -1,58 +1,29 @@
-import { useMutation, useQuery, useQueryClient } from "@tanstack/react-query";
-import { useEffect, useRef, useState } from "react";
-import { View } from "react-native";
-import { ApiError } from "@/features/api/apiError";
-import { http } from "@/features/api/httpClient";
-import { Button } from "@/features/ui/Button";
+import { useQuery } from "@tanstack/react-query";
+import { useState } from "react";
+import { checkYear, personQuery, readPerson, typedPerson } from "@/features/api/person/personFacts";
+import { useKeepPerson } from "@/features/api/person/useKeepPerson";
+import { useServerForm } from "@/features/api/useServerForm";
 import { Card } from "@/features/ui/Card";
 import { Form } from "@/features/ui/Form";
+import { FormEnd } from "@/features/ui/form/FormEnd";
+import { FormField } from "@/features/ui/form/FormField";
 import { Heading } from "@/features/ui/Heading";
 import { Notice } from "@/features/ui/Notice";
 import { QueryState } from "@/features/ui/QueryState";
+import { Question } from "@/features/ui/Question";
 import { Select } from "@/features/ui/Select";
 import { Text } from "@/features/ui/Text";
-import type { PersonFacts, PersonFactsChange } from "@/shared/contract/account";
-import { accountQueries } from "../accountQueries";
-import { FormEnd } from "@/features/ui/form/FormEnd";
-import { FormField } from "@/features/ui/form/FormField";
-import { useServerForm } from "@/features/api/useServerForm";
+import type { PersonFacts } from "@/shared/contract/account";
 import { countryOptions } from "./countryOptions";
 
-const checkYear = (year: string) =>
-  year.trim() === "" || /^(19|20)\d\d$/.test(year.trim()) ? null : "Give the year in four digits.";
-
 function FactsForm({ facts }: { facts: PersonFacts }) {
-  const client = useQueryClient();
   const [kept, setKept] = useState(false);
-  /** why it is asked first, and what was to be kept */
-  const [asked, setAsked] = useState<{ why: string; told: PersonFacts } | null>(null);
-  const keep = async (told: PersonFactsChange) => {
-    client.setQueryData(accountQueries.person().queryKey, await http.put<PersonFacts>("/account/person", told));
-    setKept(true);
-  };
-  const start = { birthYear: facts.birthYear === null ? "" : String(facts.birthYear), country: facts.country ?? "" };
-  const { form, end, submit } = useServerForm(start, async ({ birthYear, country }) => {
+  const start = typedPerson(facts);
+  const { form, end, submit } = useServerForm(start, async (typed) => {
     setKept(false);
-    setAsked(null);
-    const told: PersonFacts = {
-      birthYear: birthYear.trim() === "" ? null : Number(birthYear),
-      country: country === "" ? null : country,
-    };
-    try {
-      await keep(told);
-    } catch (error) {
-      if (!(error instanceof ApiError) || error.code !== "ends-sharing") throw error;
-      setAsked({ why: error.message, told });
-    }
+    setKept(await keep(readPerson(typed)));
   });
-  const ending = useMutation({
-    mutationFn: async ({ told }: { told: PersonFacts }) => {
-      await keep({ ...told, endsSharing: true });
-      setAsked(null);
-      await client.invalidateQueries({ queryKey: ["studio"] });
-    },
-    networkMode: "always",
-  });
+  const { keep, question } = useKeepPerson({ onEnded: () => setKept(true), onStay: () => form.reset(start) });
   return (
     <Form label="About you" onSubmit={submit}>
       <FormField
@@ -71,53 +42,16 @@ function FactsForm({ facts }: { facts: PersonFacts }) {
         error={form.formState.errors.country?.message}
         testID="country"
       />
-      {asked && (
-        <EndsSharing
-          why={asked.why}
-          busy={ending.isPending}
-          error={ending.error}
-          onEnd={() => ending.mutate(asked)}
-          onKeep={() => {
-            setAsked(null);
-            form.reset(start);
-          }}
-        />
-      )}
+      {question && <Question {...question} />}
       {kept && <Notice kind="good">Kept.</Notice>}
       <FormEnd small {...end} sendLabel="Keep this" busyLabel="Keeping it" testID="keep-person" />
     </Form>
   );
 }
 
-interface EndsSharingProps {
-  why: string;
-  busy: boolean;
-  error: Error | null;
-  onEnd: () => void;
-  onKeep: () => void;
-}
-
-/** Asks before recordings are deleted by what was typed. */
-function EndsSharing({ why, busy, error, onEnd, onKeep }: EndsSharingProps) {
-  const group = useRef<HTMLDivElement>(null);
-  useEffect(() => group.current?.focus(), []);
-  return (
-    <div ref={group} role="group" aria-label="Stop sharing?" tabIndex={-1}>
-      <Notice kind="caution" title="Stop sharing?" testID="ends-sharing">
-        <Text variant="small">{why}</Text>
-        {error && <Text variant="small" tone="brick">{`Nothing was changed. ${error.message}`}</Text>}
-        <View style={{ flexDirection: "row", flexWrap: "wrap", gap: 8, marginTop: 8 }}>
-          <Button small label="Stop and delete them" busy={busy} onPress={onEnd} testID="end-sharing" />
-          <Button kind="secondary" small label="Go on sharing" onPress={onKeep} testID="go-on-sharing" />
-        </View>
-      </Notice>
-    </div>
-  );
-}
-
 /** Year of birth and country, asked of everybody alike. */
 export function AboutYou() {
-  const query = useQuery(accountQueries.person());
+  const query = useQuery(personQuery);
   return (
     <Card style={{ gap: 12 }}>
       <Heading level={2}>About you</Heading>

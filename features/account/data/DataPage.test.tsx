@@ -11,6 +11,7 @@ jest.mock("expo-router", () => ({
 
 const stage = setAccountStage({ signedIn: true });
 beforeEach(() => {
+  Element.prototype.scrollIntoView = () => undefined;
   mockSaved.mockClear();
   stage.answers["GET /account/person"] = { status: 200, body: { birthYear: 1979, country: "DE" } };
 });
@@ -35,14 +36,14 @@ it("asks first where the year would end sharing and delete recordings, and keeps
   await screen.findByTestId("birth-year");
   type("Year of birth", "2019");
   submit("About you");
-  expect((await screen.findByTestId("ends-sharing")).textContent).toMatch(/deleted for good/);
-  fireEvent.click(screen.getByTestId("go-on-sharing"));
+  expect((await screen.findByRole("group", { name: "Stop sharing?" })).textContent).toMatch(/deleted for good/);
+  fireEvent.click(screen.getByRole("button", { name: "Go on sharing" }));
   expect(valueOf("Year of birth")).toBe("1979");
   type("Year of birth", "2019");
   submit("About you");
-  await screen.findByTestId("ends-sharing");
+  await screen.findByRole("group", { name: "Stop sharing?" });
   stage.answers[keeps] = { status: 200, body: { birthYear: 2019, country: "DE" } };
-  fireEvent.click(screen.getByTestId("end-sharing"));
+  fireEvent.click(screen.getByRole("button", { name: "Stop and delete them" }));
   expect(await screen.findByText("Kept.")).toBeTruthy();
   expect(stage.sent(keeps).at(-1)).toEqual({ birthYear: 2019, country: "DE", endsSharing: true });
 });

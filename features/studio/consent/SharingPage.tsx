@@ -1,6 +1,7 @@
 import { useQuery } from "@tanstack/react-query";
 import type { Href } from "expo-router";
 import { http } from "@/features/api/httpClient";
+import { stopSharingWords } from "@/features/api/person/stopSharingWords";
 import { AskedTwice } from "@/features/ui/AskedTwice";
 import { Card } from "@/features/ui/Card";
 import { EmptyState } from "@/features/ui/EmptyState";
@@ -89,11 +90,8 @@ function ConsentCard({ studio, now }: { studio: Studio; now: Date }) {
               testID="consent-switch"
             />
           )}
-          question="Stop sharing?"
+          {...stopSharingWords}
           text={`From that moment they see only your name. Recordings you handed in to ${studio.name} and recorded answers are deleted for good.`}
-          failed="Nothing was changed."
-          confirmLabel="Stop and delete them"
-          keepLabel="Go on sharing"
           onRemove={() => set.mutate(false)}
           busy={set.isPending}
           error={set.error}

@@ -22,6 +22,7 @@ const look = {
 let server: Answers;
 
 beforeEach(() => {
+  Element.prototype.scrollIntoView = () => undefined;
   sessionStorage.clear();
   localStorage.clear();
   window.history.replaceState(null, "", "/invite#a-token");
@@ -87,6 +88,33 @@ it("asks for the year of birth where one agrees, then joins with what was chosen
   expect(server.bodiesOf("POST /invites/accept")).toEqual([{ token: "a-token", name: "Maren Oake", agree: true }]);
   expect(sessionStorage.getItem("larkspan.invite-link")).toBeNull();
   expect(screen.queryByTestId("guardian-email")).toBeNull();
+});
+
+it("asks before joining where the year typed would end sharing elsewhere, keeps the old one, or ends it and joins", async () => {
+  const why = "By this your teachers see only your name (Tuesday upstairs), and recordings are deleted for good.";
+  server.to("GET /account/person", { birthYear: 1988, country: null });
+  server.to("PUT /account/person", { code: "ends-sharing", message: why }, 409);
+  server.to("POST /invites/accept", asPupil({ shares: false }));
+  await open();
+  await screen.findByTestId("join-name");
+  type("join-name", "Maren Oake");
+  type("join-year", "2015");
+  fireEvent.click(screen.getByRole("radio", { name: /^Join without/ }));
+  fireEvent.click(screen.getByTestId("join"));
+  expect((await screen.findByRole("group", { name: "Stop sharing?" })).textContent).toContain(why);
+  expect(server.bodiesOf("POST /invites/accept")).toEqual([]);
+  fireEvent.click(screen.getByRole("button", { name: "Go on sharing" }));
+  expect(screen.queryByRole("group", { name: "Stop sharing?" })).toBeNull();
+  expect(screen.getByTestId<HTMLInputElement>("join-year").value).toBe("1988");
+  expect(screen.getByTestId<HTMLInputElement>("join-name").value).toBe("Maren Oake");
+  type("join-year", "2015");
+  fireEvent.click(screen.getByTestId("join"));
+  await screen.findByRole("group", { name: "Stop sharing?" });
+  server.to("PUT /account/person", { birthYear: 2015, country: null });
+  fireEvent.click(screen.getByRole("button", { name: "Stop and delete them" }));
+  expect(await screen.findByTestId("joined")).toBeTruthy();
+  expect(server.bodiesOf("PUT /account/person")).toContainEqual({ birthYear: 2015, country: null, endsSharing: true });
+  expect(server.bodiesOf("POST /invites/accept")).toEqual([{ token: "a-token", name: "Maren Oake", agree: false }]);
 });
 
 it("asks those who are too young for a guardian's address, and says that nothing is shared until then", async () => {

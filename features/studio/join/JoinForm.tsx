@@ -1,12 +1,15 @@
 import { useQuery } from "@tanstack/react-query";
 import { useState } from "react";
 import { http } from "@/features/api/httpClient";
+import { checkYear, personQuery, readPerson, typedPerson } from "@/features/api/person/personFacts";
+import { useKeepPerson } from "@/features/api/person/useKeepPerson";
 import { useServerForm } from "@/features/api/useServerForm";
 import { Choice } from "@/features/ui/Choice";
 import { Form } from "@/features/ui/Form";
 import { FormEnd } from "@/features/ui/form/FormEnd";
 import { FormField } from "@/features/ui/form/FormField";
 import { QueryState } from "@/features/ui/QueryState";
+import { Question } from "@/features/ui/Question";
 import { Select } from "@/features/ui/Select";
 import { Text } from "@/features/ui/Text";
 import type { PersonFacts } from "@/shared/contract/account";
@@ -24,7 +27,7 @@ export interface JoinFormProps {
 
 /** Joining: a name, and for pupils the year of birth, the country, and whether they agree. */
 export function JoinForm(props: JoinFormProps) {
-  const person = useQuery({ queryKey: ["account", "person"], queryFn: () => http.get<PersonFacts>("/account/person") });
+  const person = useQuery(personQuery);
   return (
     <QueryState query={person} title="Your account could not be asked">
       {(facts) => <Fields {...props} facts={facts} />}
@@ -38,25 +41,18 @@ const wishes: { value: Wish; label: string; hint: string }[] = [
   { value: "later", label: "Join without agreeing", hint: "They see only my name. I can agree later." },
 ];
 
-const yearOf = (text: string) => (/^(19|20)\d\d$/.test(text.trim()) ? Number(text.trim()) : null);
-
 function Fields({ look, token, countries, facts, onJoined }: JoinFormProps & { facts: PersonFacts }) {
   const refresh = useStudioRefresh();
   const pupil = look.role === "pupil";
   const [wish, setWish] = useState<Wish | null>(null);
   const [missing, setMissing] = useState(false);
-  const start = {
-    name: "",
-    birthYear: facts.birthYear === null ? "" : String(facts.birthYear),
-    country: facts.country ?? "",
-  };
-  const { form, end, submit } = useServerForm(start, async ({ name, birthYear, country }) => {
+  const before = typedPerson(facts);
+  const { form, end, submit } = useServerForm({ name: "", ...before }, async ({ name, ...typed }) => {
     if (pupil && wish === null) {
       setMissing(true);
       return;
     }
-    if (pupil && birthYear.trim() !== "")
-      await http.put("/account/person", { birthYear: yearOf(birthYear), country: country === "" ? null : country });
+    if (pupil && typed.birthYear.trim() !== "" && !(await keep(readPerson(typed)))) return;
     const studio = await http.post<Studio>("/invites/accept", {
       token,
       name: name.trim(),
@@ -65,10 +61,15 @@ function Fields({ look, token, countries, facts, onJoined }: JoinFormProps & { f
     await refresh();
     onJoined(studio);
   });
-  const checkYear = (year: string) => {
-    if (year.trim() === "") return wish === "agree" ? "Give the year; the rules differ by age and country." : null;
-    return yearOf(year) === null ? "Give the year in four digits." : null;
-  };
+  const { keep, question } = useKeepPerson({
+    onEnded: submit,
+    onStay: () => {
+      form.setValue("birthYear", before.birthYear);
+      form.setValue("country", before.country);
+    },
+  });
+  const checkYearHere = (year: string) =>
+    year.trim() === "" && wish === "agree" ? "Give the year; the rules differ by age and country." : checkYear(year);
   return (
     <Form label="Join the studio" onSubmit={submit}>
       <FormField
@@ -87,7 +88,7 @@ function Fields({ look, token, countries, facts, onJoined }: JoinFormProps & { f
             name="birthYear"
             label="Year of birth"
             hint="Asked of everybody. The rules for sharing recordings differ by age and country."
-            check={checkYear}
+            check={checkYearHere}
             inputMode="numeric"
             testID="join-year"
           />
@@ -115,6 +116,7 @@ function Fields({ look, token, countries, facts, onJoined }: JoinFormProps & { f
           )}
         </>
       )}
+      {question && <Question {...question} />}
       <FormEnd {...end} sendLabel="Join the studio" busyLabel="Joining the studio" testID="join" />
     </Form>
   );

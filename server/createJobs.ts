@@ -10,8 +10,7 @@ import { sendMailTask } from "./mail/mail.service";
 import { MailPreferencesService } from "./mail/mailPreferences.service";
 import { Postman } from "./mail/postman";
 import type { ObjectStore } from "./storage/objectStore.service";
-import { HandInsService } from "./studio/handIns/handIns.service";
-import { deleteTakesTask } from "./studio/handIns/takeDeletion";
+import { deleteTakesTask, TakeDeletion } from "./studio/handIns/takeDeletion";
 import { WeeklySummaryService } from "./studio/weekly/weeklySummary.service";
 
 /** Writes the summaries of the week. */
@@ -50,7 +49,7 @@ export function createJobs(dataSource: DataSource, settings: JobSettings): Jobs 
   });
   const parts = authParts(dataSource, { tokenSecret, publicOrigin: origin });
   const personalData = createPersonalData(dataSource, { tokenSecret, objects });
-  const takes = new HandInsService(dataSource, objects).deletion;
+  const takes = new TakeDeletion(dataSource, objects);
   const handlers: Record<string, JobHandler> = {
     [sendMailTask]: (payload) => postman.deliver(payload),
     [sendResetTask]: (payload) => sendReset(parts, payload),

@@ -1,5 +1,5 @@
 import { randomUUID } from "node:crypto";
-import type { DataSource, EntityManager } from "typeorm";
+import { type DataSource, type EntityManager, Not } from "typeorm";
 import type { HandIn, HandInRequest, SoundLink } from "../../../shared/contract/studio/handIn";
 import { mostTakeBytes } from "../../../shared/contract/studio/takeLimits";
 import { HttpProblem, notFound } from "../../http/httpProblem";
@@ -9,9 +9,9 @@ import { StudioAccessService } from "../studioAccess.service";
 import { HandInEntity } from "./handIn.entity";
 import { tellPupil, tellTeachers } from "./handInMails";
 import { soundType, tellingBytes } from "./soundType";
-import { markDeleted, TakeDeletion, wakeDeletion } from "./takeDeletion";
+import { markDeleted, wakeDeletion } from "./takeDeletion";
 import { UploadLocks } from "./uploadLocks";
-import { orStorageDown, Uploads } from "./uploads";
+import { Uploads } from "./uploads";
 
 /** So many recordings one thread holds at a time. */
 const mostInThread = 100;
@@ -22,7 +22,6 @@ type Row = HandInEntity & { authorName: string; authorUserId: string };
 /** Recordings in the threads of parts: announced, sent, heard, and deleted again. */
 export class HandInsService {
   readonly uploads: Uploads;
-  readonly deletion: TakeDeletion;
   private readonly locks: UploadLocks;
   private readonly parts: PartAccessService;
   private readonly studios: StudioAccessService;
@@ -34,24 +33,24 @@ export class HandInsService {
     this.locks = new UploadLocks(dataSource);
     this.parts = new PartAccessService(dataSource);
     this.studios = new StudioAccessService(dataSource);
-    this.deletion = new TakeDeletion(dataSource, objects, this.locks);
     this.uploads = new Uploads({ objects, locks: this.locks, onComplete: (key) => this.finish(key) });
   }
 
   /** Makes room for a recording. Said again it changes nothing, but ends what an interrupted answer left unfinished. */
   async announce(userId: string, partId: string, request: HandInRequest): Promise<HandIn> {
     const id = request.id.toLowerCase();
-    await this.dataSource.transaction(async (manager) => {
+    const key = await this.dataSource.transaction(async (manager) => {
       await manager.query("SELECT FROM assignment_parts WHERE id = $1 FOR NO KEY UPDATE", [partId]);
       const access = await this.parts.reach(userId, partId, manager);
       refuseUnshared(access);
       if ((request.kind === "teacher-answer") !== (access.side === "teacher"))
         throw new HttpProblem(403, "wrong-side", "Pupils hand in takes, and teachers answer them.");
-      const kept = await this.rows(manager).where("h.id = :id", { id }).getOne();
-      if (kept) refuseOther(kept, access, request);
-      else await this.put(manager, access, { ...request, id });
+      const kept = await manager.findOneBy(HandInEntity, { id });
+      if (!kept) return put(manager, access, { ...request, id });
+      refuseOther(kept, access, request);
+      return kept.storageKey;
     });
-    await this.begin(id, request.bytes);
+    await this.begin(key, request.bytes);
     return this.get(userId, id);
   }
 
@@ -101,22 +100,19 @@ export class HandInsService {
   }
 
   /** Begins the upload, or ends one whose last answer was lost. */
-  private async begin(id: string, bytes: number): Promise<void> {
-    const find = () => this.rows(this.dataSource.manager).where("h.id = :id", { id }).getOne();
-    const key = (await find())?.storageKey;
-    if (key === undefined) return;
+  private async begin(key: string, bytes: number): Promise<void> {
     const complete = await this.locks.while(key, async () => {
-      if ((await find())?.state !== "uploading") return false;
-      return orStorageDown(this.uploads.begin(key, bytes));
+      const awaited = await this.dataSource.manager.existsBy(HandInEntity, { storageKey: key, state: "uploading" });
+      return awaited && this.uploads.begin(key, bytes);
     });
     if (complete) await this.finish(key);
   }
 
   /** All bytes are there: looks at them, puts the recording into the thread and tells the other side. */
   private async finish(key: string): Promise<void> {
-    const beginning = await orStorageDown(this.objects.read(key, tellingBytes));
+    const beginning = await this.objects.read(key, tellingBytes);
     const mediaType = beginning && (await soundType(beginning));
-    const size = await orStorageDown(this.objects.size(key));
+    const size = await this.objects.size(key);
     if (!mediaType || size === null || size > mostTakeBytes) {
       await markDeleted(this.dataSource, "refused", "h.storage_key = $1", [key]);
       await wakeDeletion(this.dataSource);
@@ -148,21 +144,6 @@ export class HandInsService {
     });
   }
 
-  private async put(manager: EntityManager, access: PartAccess, request: HandInRequest): Promise<void> {
-    const { partId, me, recordingsKeptDays } = access;
-    const kept = await this.rows(manager).where("h.partId = :partId AND h.state <> 'deleted'", { partId }).getCount();
-    if (kept >= mostInThread)
-      throw new HttpProblem(409, "collection-full", `A thread holds at most ${mostInThread} recordings at a time.`);
-    const expiresAt = new Date(Date.now() + recordingsKeptDays * dayMs);
-    await manager
-      .createQueryBuilder()
-      .insert()
-      .into(HandInEntity)
-      .values({ ...request, partId, authorId: me.memberId, storageKey: randomUUID(), state: "uploading", expiresAt })
-      .updateEntity(false)
-      .execute();
-  }
-
   /** A recording and how the asker stands to its part; for whoever has nothing to do with it there is none. */
   private async reach(userId: string, id: string): Promise<{ row: Row; access: PartAccess }> {
     const [row] = await this.found("h.id = $1", [id]);
@@ -185,10 +166,18 @@ export class HandInsService {
       values,
     );
   }
+}
 
-  private rows(manager: EntityManager) {
-    return manager.createQueryBuilder(HandInEntity, "h");
-  }
+/** Makes its row; the key by which it will lie in the storage. */
+async function put(manager: EntityManager, access: PartAccess, request: HandInRequest): Promise<string> {
+  const { partId, me, recordingsKeptDays } = access;
+  if ((await manager.countBy(HandInEntity, { partId, state: Not("deleted") })) >= mostInThread)
+    throw new HttpProblem(409, "collection-full", `A thread holds at most ${mostInThread} recordings at a time.`);
+  const storageKey = randomUUID();
+  const expiresAt = new Date(Date.now() + recordingsKeptDays * dayMs);
+  const row = { ...request, partId, authorId: me.memberId, storageKey, state: "uploading" as const, expiresAt };
+  await manager.insert(HandInEntity, row);
+  return storageKey;
 }
 
 function refuseOthers(row: HandInEntity, { me }: PartAccess): void {

@@ -1,8 +1,8 @@
 import type { DataSource } from "typeorm";
 import type { PersonalDataPart } from "../../auth/personalData.service";
 import type { ObjectStore } from "../../storage/objectStore.service";
-import { HandInsService } from "./handIns.service";
 import { soundEnding } from "./soundType";
+import { TakeDeletion } from "./takeDeletion";
 
 interface Kept {
   id: string;
@@ -49,6 +49,5 @@ export class HandedInTakes implements PersonalDataPart {
     return files;
   };
 
-  readonly erase = (userId: string): Promise<void> =>
-    new HandInsService(this.dataSource, this.objects).deletion.erase(userId);
+  readonly erase = (userId: string): Promise<void> => new TakeDeletion(this.dataSource, this.objects).erase(userId);
 }

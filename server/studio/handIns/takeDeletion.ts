@@ -2,7 +2,7 @@ import type { DataSource, EntityManager } from "typeorm";
 import { enqueue } from "../../jobs/jobs.service";
 import type { ObjectStore } from "../../storage/objectStore.service";
 import { memberShares } from "../consent/digitalConsent";
-import type { UploadLocks } from "./uploadLocks";
+import { UploadLocks } from "./uploadLocks";
 
 /** The name of the job that deletes recordings that are to go, from the storage too. */
 export const deleteTakesTask = "deleteTakes";
@@ -56,6 +56,9 @@ export async function markDeleted(
   });
 }
 
+/** Condition on a row `h` of hand_ins: it tells how a take felt, also where nothing else is left of it. */
+export const tellsHowItFelt = "(h.state = 'ready' OR h.state = 'deleted' AND h.effort IS NOT NULL)";
+
 /** Parts tell of the newest take that is still there. What a teacher has answered stays answered. */
 async function backToTakeBefore(manager: EntityManager, partIds: string[]): Promise<void> {
   if (partIds.length === 0) return;
@@ -85,11 +88,14 @@ const theirs = `h.author_id IN (SELECT id FROM studio_members WHERE user_id = $1
   OR h.part_id IN (SELECT p.id FROM assignment_parts p JOIN studios s ON s.id = p.studio_id WHERE s.owner_id = $1)`;
 
 export class TakeDeletion {
+  private readonly locks: UploadLocks;
+
   constructor(
     private readonly dataSource: DataSource,
     private readonly objects: ObjectStore,
-    private readonly locks: UploadLocks,
-  ) {}
+  ) {
+    this.locks = new UploadLocks(dataSource);
+  }
 
   /** Finds what is to go (expired, abandoned, not shared any more) and deletes it. May run at any time, and more than once. */
   async sweep(): Promise<void> {

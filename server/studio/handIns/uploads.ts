@@ -25,7 +25,13 @@ export class Uploads {
   constructor(private readonly settings: UploadSettings) {}
 
   /** Begins an upload, or finds the one that has begun; tells whether all of it is there. Call it under the upload's lock. */
-  async begin(key: string, size: number): Promise<boolean> {
+  begin(key: string, size: number): Promise<boolean> {
+    return this.beginOrFind(key, size).catch((error: unknown) => {
+      throw error instanceof HttpProblem ? error : storageDown();
+    });
+  }
+
+  private async beginOrFind(key: string, size: number): Promise<boolean> {
     const { Upload } = await import("@tus/server");
     const { datastore } = await this.server();
     const begun = await datastore.getUpload(key).catch((error: unknown) => {
@@ -101,11 +107,4 @@ async function problemOf(error: unknown, hasBegun: () => Promise<boolean>): Prom
   if (!isTusError(error)) return storageDown();
   if (error.status_code === 404 && (await hasBegun().catch(() => true))) return storageDown();
   return new HttpProblem(error.status_code, "upload-refused", error.body.trim());
-}
-
-/** What asks the storage, where a fault of it is told as such. */
-export async function orStorageDown<Result>(asked: Promise<Result>): Promise<Result> {
-  return asked.catch((error: unknown) => {
-    throw error instanceof HttpProblem ? error : storageDown();
-  });
 }

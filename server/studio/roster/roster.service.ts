@@ -8,6 +8,7 @@ import { tuneSpan } from "../../../shared/songs/tuneSpan";
 import { InstrumentEntity } from "../../instruments/instrument.entity";
 import { PlayerWishesEntity } from "../../ways/playerWishes.entity";
 import { consentColumns, type ConsentRow, splitConsent } from "../consent/memberConsent";
+import { tellsHowItFelt } from "../handIns/takeDeletion";
 import type { StudioAccessService } from "../studioAccess.service";
 import { rosterWarnings, type SungEffort } from "./rosterWarnings";
 import { SharedVoicesService } from "./sharedVoices.service";
@@ -152,7 +153,7 @@ export class RosterService {
                 h.measures#>>'{fellShort,side}' = 'above' AS strained,
                 row_number() OVER (PARTITION BY p.member_id ORDER BY h.created_at DESC, h.id) AS place
          FROM hand_ins h JOIN assignment_parts p ON p.id = h.part_id
-         WHERE p.studio_id = $1 AND h.kind = 'pupil-take' AND (h.state = 'ready' OR h.state = 'deleted' AND h.effort IS NOT NULL)) newest
+         WHERE p.studio_id = $1 AND h.kind = 'pupil-take' AND ${tellsHowItFelt}) newest
        WHERE place <= 2 ORDER BY "memberId", place`,
       [studioId],
     );

@@ -5,12 +5,15 @@ import { instrumentsOf } from "./instruments/instruments.service";
 import { decisionsOf } from "./keys/decisions.service";
 import { triesOf } from "./keys/tries.service";
 import { lineUpsOf } from "./lineUps/lineUps.service";
+import { LinkTokensService } from "./mail/linkTokens.service";
 import { MailPreferencesService } from "./mail/mailPreferences.service";
 import { SheetLinksService } from "./sheets/sheetLinks.service";
 import { SongVersionsService } from "./songs/songVersions.service";
 import { songsOf } from "./songs/songs.service";
+import { GuardiansService } from "./studio/consent/guardians.service";
 import { studioDataOf } from "./studio/studioData.service";
-import { studioParts } from "./studio/studioParts";
+import { StudioAccessService } from "./studio/studioAccess.service";
+import { StudiosService } from "./studio/studios.service";
 import { playerWishesOf } from "./ways/playerWishes.service";
 import type { ObjectStore } from "./storage/objectStore.service";
 import { HandedInTakes } from "./studio/handIns/handedInTakes.service";
@@ -25,7 +28,8 @@ export function createPersonalData(
   { tokenSecret, objects }: { tokenSecret: string; objects: ObjectStore },
 ): PersonalDataPart[] {
   const preferences = new MailPreferencesService(dataSource, tokenSecret);
-  const { studios, guardians } = studioParts(dataSource, { tokenSecret });
+  const studios = new StudiosService(dataSource, new StudioAccessService(dataSource));
+  const guardians = new GuardiansService(dataSource, new LinkTokensService(tokenSecret));
   const versions = new SongVersionsService(dataSource);
   return [
     {

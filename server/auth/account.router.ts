@@ -8,14 +8,16 @@ import {
   personFacts,
   personFactsChange,
 } from "../../shared/contract/account";
+import { addressOf } from "../http/addressOf";
 import type { Api } from "../http/api";
 import { currentSessionId, currentUserId } from "../http/currentUser";
 import { notFound } from "../http/httpProblem";
 import { idIn } from "../http/ownedCollection.router";
 import { parse } from "../http/parse";
+import { tooMany } from "../http/tryBucket";
 import { refuseEndOfSharing } from "../studio/consent/endOfSharing.service";
 import type { GuardiansService } from "../studio/consent/guardians.service";
-import { addressOf, type AuthParts, tellOwner } from "./authParts";
+import { type AuthParts, tellOwner } from "./authParts";
 import { askForErasure } from "./erasure";
 import { refuseCommonPassword } from "./newPassword";
 import { exportArchive, type PersonalDataPart } from "./personalData.service";
@@ -23,7 +25,6 @@ import { exportArchive, type PersonalDataPart } from "./personalData.service";
 const tag = "account";
 const facts = { name: "PersonFacts", schema: personFacts };
 const wrongPassword = { description: "The password is wrong (wrong-password)." };
-const tooMany = { description: "Tried too often (too-many-tries); Retry-After tells the seconds to wait." };
 
 type Guardians = Pick<GuardiansService, "refuseOlder">;
 

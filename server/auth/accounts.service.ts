@@ -44,7 +44,7 @@ export class AccountsService {
     const passwordHash = await this.passwords.hash(password);
     return this.dataSource.transaction(async (manager) => {
       // The same form sent twice at once opens one account.
-      await manager.query("SELECT pg_advisory_xact_lock(8400003, hashtext(lower($1)))", [email]);
+      await lockAddress(manager, email);
       const known = await this.recognise(email, password, manager);
       if (known) return { person: known, isNew: false };
       const rows: { id: string }[] = await manager.query(
@@ -161,6 +161,21 @@ export class AccountsService {
     const rows: KnownPerson[] = await connection.query(`SELECT ${columns} FROM users u WHERE u.id = $1`, [id]);
     return rows[0] ?? null;
   }
+}
+
+/** One at a time decides whose an address is, until the transaction is done. */
+export async function lockAddress(manager: EntityManager, email: string): Promise<void> {
+  await manager.query("SELECT pg_advisory_xact_lock(8400003, hashtext(lower($1)))", [email]);
+}
+
+/** Confirms an address that the account has, unless it is confirmed or another account has confirmed it. */
+export async function confirmAddress(manager: EntityManager, userId: string, email: string): Promise<void> {
+  await lockAddress(manager, email);
+  await manager.query(
+    `UPDATE users SET confirmed_at = now() WHERE id = $1 AND lower(email) = lower($2) AND confirmed_at IS NULL
+       AND NOT EXISTS (SELECT FROM users WHERE lower(email) = lower($2) AND confirmed_at IS NOT NULL)`,
+    [userId, email],
+  );
 }
 
 export function toAccount({ id, email, role, confirmed, secondFactor }: KnownPerson): Account {

@@ -9,13 +9,15 @@ import {
   signInRequest,
   signUpRequest,
 } from "../../shared/contract/account";
+import { addressOf } from "../http/addressOf";
 import type { Api } from "../http/api";
 import { currentUserId } from "../http/currentUser";
 import { HttpProblem, noSession } from "../http/httpProblem";
 import { parse } from "../http/parse";
+import { tooMany } from "../http/tryBucket";
 import { accessTokenLifeS, challengeLifeS, readChallenge, signAccessToken, signChallenge } from "./accessToken";
 import { toAccount } from "./accounts.service";
-import { addressOf, type AuthParts, deviceOf, tellOwner } from "./authParts";
+import { type AuthParts, deviceOf, tellOwner } from "./authParts";
 import { cancelErasure } from "./erasure";
 import { suspended } from "./guard";
 import { refuseCommonPassword } from "./newPassword";
@@ -25,7 +27,6 @@ import type { Begun } from "./sessions.service";
 
 const tag = "account";
 const session = { name: "Session", schema: sessionResponse };
-const tooMany = { description: "Tried too often (too-many-tries); Retry-After tells the seconds to wait." };
 const otherOrigin = { description: "The request came from a page of another site (other-origin)." };
 const challenge = {
   description: "The password is right; a code is needed as well. Send the challenge with it to /auth/second-step.",

@@ -46,7 +46,6 @@ export function authParts(dataSource: DataSource, settings: AuthSettings): AuthP
   };
 }
 
-export const addressOf = (req: Request<Record<string, string>>) => req.ip ?? "";
 export const deviceOf = (req: Request<Record<string, string>>) => deviceWords(req.get("user-agent"));
 
 /** Tells the owner of an account that something about its safety has changed. */

@@ -1,17 +1,18 @@
 import { account, changeEmailRequest, confirmEmailRequest } from "../../shared/contract/account";
+import { addressOf } from "../http/addressOf";
 import type { Api } from "../http/api";
 import { currentUserId } from "../http/currentUser";
 import { HttpProblem } from "../http/httpProblem";
 import { parse } from "../http/parse";
+import { tooMany } from "../http/tryBucket";
 import { enqueueMail } from "../mail/mail.service";
-import { confirmPurpose } from "./accounts.service";
-import { addressOf, type AuthParts, tellOwner } from "./authParts";
+import { confirmPurpose, lockAddress } from "./accounts.service";
+import { type AuthParts, tellOwner } from "./authParts";
 import { linkNotValid } from "./recovery.router";
 
 const tag = "account";
 const changePurpose = "change-email";
 const changeLifeS = 24 * 3600;
-const tooMany = { description: "Tried too often (too-many-tries); Retry-After tells the seconds to wait." };
 
 /** Showing that an address is one's own, and changing to another. */
 export function emailRoutes(api: Api, parts: AuthParts): void {
@@ -108,7 +109,7 @@ export function emailRoutes(api: Api, parts: AuthParts): void {
         if (meant?.userId !== userId) throw linkNotValid();
         const spent = await tokens.spend(manager, first ? confirmPurpose : changePurpose, token);
         if (!spent || (first && spent.email.toLowerCase() !== before.email.toLowerCase())) throw linkNotValid();
-        await manager.query("SELECT pg_advisory_xact_lock(8400003, hashtext(lower($1)))", [spent.email]);
+        await lockAddress(manager, spent.email);
         if (await accounts.isConfirmedByAnother(manager, spent.email, userId)) {
           const message = "Another account uses this address. Sign in to that one.";
           throw new HttpProblem(409, "address-in-use", message);

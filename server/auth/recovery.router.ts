@@ -1,10 +1,12 @@
 import { forgottenRequest, resetRequest } from "../../shared/contract/account";
+import { addressOf } from "../http/addressOf";
 import type { Api } from "../http/api";
 import { HttpProblem } from "../http/httpProblem";
 import { parse } from "../http/parse";
+import { tooMany } from "../http/tryBucket";
 import { enqueue } from "../jobs/jobs.service";
 import { enqueueMail } from "../mail/mail.service";
-import { addressOf, type AuthParts, tellOwner } from "./authParts";
+import { type AuthParts, tellOwner } from "./authParts";
 import { refuseCommonPassword } from "./newPassword";
 
 const tag = "account";
@@ -20,7 +22,6 @@ export const linkNotValid = () =>
 /** The way back for whoever forgot the password. */
 export function recoveryRoutes(api: Api, parts: AuthParts): void {
   const { dataSource, accounts, sessions, tokens, limits, log } = parts;
-  const tooMany = { description: "Tried too often (too-many-tries); Retry-After tells the seconds to wait." };
   const otherOrigin = { description: "The request came from a page of another site (other-origin)." };
 
   api.route(

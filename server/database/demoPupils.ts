@@ -23,17 +23,15 @@ interface Sung {
 function take({ at, low, high, comfort, effort }: Sung): DemoPerson["takes"][number] {
   const middle = Math.round((low + high) / 2);
   const sung: [number, number][] = [
-    ...([
-      [middle, 0.9],
-      [middle + 2, 0.7],
-      [middle + 4, 1.2],
-      [middle, 0.8],
-      [comfort[0], 1.1],
-      [low, 0.8],
-      [middle, 0.6],
-      [comfort[1], 1.3],
-      [high, 0.7],
-    ] as [number, number][]),
+    [middle, 0.9],
+    [middle + 2, 0.7],
+    [middle + 4, 1.2],
+    [middle, 0.8],
+    [comfort[0], 1.1],
+    [low, 0.8],
+    [middle, 0.6],
+    [comfort[1], 1.3],
+    [high, 0.7],
   ];
   return { sungAt: at, warmedUp: true, effort, comfort, sung };
 }

@@ -75,7 +75,7 @@ export class OwnedCollection<Item extends { id: string }, Row extends Item & Own
     const next = beforeSave ? await beforeSave({ manager, userId, item, kept, wishes }) : item;
     if (next === null && kept) return { created: false, item: kept };
     const created = await this.write(manager, userId, next ?? item);
-    if (created) await this.refuseTooMany(manager, userId);
+    if (created) await this.refuseTooMany(manager, [userId]);
     const saved = await this.find(manager, userId, id);
     if (!saved) throw notFound(this.noun);
     return { created, item: saved };
@@ -98,14 +98,7 @@ export class OwnedCollection<Item extends { id: string }, Row extends Item & Own
       }
       await manager.createQueryBuilder().insert().into(this.entity).values(rows).updateEntity(false).execute();
     }
-    const full: object[] = await manager
-      .createQueryBuilder(this.entity, "item")
-      .select("item.userId")
-      .where("item.userId IN (:...people)", { people })
-      .groupBy("item.userId")
-      .having("count(*) > :limit", { limit: this.limit })
-      .getRawMany();
-    if (full.length > 0) throw this.tooMany();
+    await this.refuseTooMany(manager, people);
   }
 
   async remove(userId: string, id: string): Promise<void> {
@@ -150,14 +143,17 @@ export class OwnedCollection<Item extends { id: string }, Row extends Item & Own
     return row && toItem<Item, Row>(row);
   }
 
-  private async refuseTooMany(manager: EntityManager, userId: string): Promise<void> {
-    const count = await rowsOf(manager, this.entity, userId).getCount();
-    if (count > this.limit) throw this.tooMany();
-  }
-
-  private tooMany(): HttpProblem {
+  private async refuseTooMany(manager: EntityManager, people: readonly string[]): Promise<void> {
+    const full: object[] = await manager
+      .createQueryBuilder(this.entity, "item")
+      .select("item.userId")
+      .where("item.userId IN (:...people)", { people })
+      .groupBy("item.userId")
+      .having("count(*) > :limit", { limit: this.limit })
+      .getRawMany();
+    if (full.length === 0) return;
     const message = `An account keeps at most ${this.limit} of these. Remove one first.`;
-    return new HttpProblem(409, "collection-full", message);
+    throw new HttpProblem(409, "collection-full", message);
   }
 }
 
@@ -166,7 +162,7 @@ export class OwnedCollection<Item extends { id: string }, Row extends Item & Own
  * not the other unique index (id, user_id); the count of items must not be overtaken; and whoever removes a song and
  * whoever decides its key would lock the two rows in opposite order.
  */
-async function lockAccounts(manager: EntityManager, people: readonly string[]): Promise<void> {
+export async function lockAccounts(manager: EntityManager, people: readonly string[]): Promise<void> {
   await manager.query("SELECT FROM users WHERE id = ANY($1) ORDER BY id FOR NO KEY UPDATE", [people]);
 }
 

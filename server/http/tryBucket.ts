@@ -4,6 +4,9 @@ import { HttpProblem } from "./httpProblem";
 
 const quarterHourS = 900;
 
+/** What a route that counts tries may answer, as the API's description words it. */
+export const tooMany = { description: "Tried too often (too-many-tries); Retry-After tells the seconds to wait." };
+
 /** Allows so many tries by one key in so many seconds; the count is shared by all servers on the database. */
 export class TryBucket {
   private readonly limiter: RateLimiterPostgres;

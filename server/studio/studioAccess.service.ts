@@ -1,8 +1,6 @@
 import type { DataSource, EntityManager } from "typeorm";
-import type { MemberConsent } from "../../shared/contract/studio/consent";
 import type { StudioRole } from "../../shared/contract/studio/studio";
 import { HttpProblem, notFound } from "../http/httpProblem";
-import { consentColumns, type ConsentRow, splitConsent } from "./consent/memberConsent";
 
 type Connection = DataSource | EntityManager;
 
@@ -10,13 +8,14 @@ type Connection = DataSource | EntityManager;
 interface Membership {
   memberId: string;
   studioId: string;
-  userId: string;
   name: string;
   role: StudioRole;
-  consent: MemberConsent;
 }
 
 export const teaches = ({ role }: { role: StudioRole }) => role !== "pupil";
+
+export const teachersOnly = () =>
+  new HttpProblem(403, "teachers-only", "Only the teachers of this studio may do this.");
 
 export const notAgreed = (message: string) => new HttpProblem(403, "not-agreed", message);
 
@@ -25,19 +24,18 @@ export class StudioAccessService {
   constructor(private readonly dataSource: DataSource) {}
 
   async member(userId: string, studioId: string, connection: Connection = this.dataSource): Promise<Membership> {
-    const rows: (Omit<Membership, "consent"> & ConsentRow)[] = await connection.query(
-      `SELECT m.id AS "memberId", m.studio_id AS "studioId", m.user_id AS "userId", m.name, m.role, ${consentColumns}
-       FROM studio_members m JOIN users u ON u.id = m.user_id
-       WHERE m.studio_id = $1 AND m.user_id = $2 AND m.left_at IS NULL`,
+    const rows: Membership[] = await connection.query(
+      `SELECT id AS "memberId", studio_id AS "studioId", name, role FROM studio_members
+       WHERE studio_id = $1 AND user_id = $2 AND left_at IS NULL`,
       [studioId, userId],
     );
     if (!rows[0]) throw notFound("studio");
-    return splitConsent(rows[0]);
+    return rows[0];
   }
 
   async teacher(userId: string, studioId: string, connection?: Connection): Promise<Membership> {
     const member = await this.member(userId, studioId, connection);
-    if (!teaches(member)) throw new HttpProblem(403, "teachers-only", "Only the teachers of this studio may do this.");
+    if (!teaches(member)) throw teachersOnly();
     return member;
   }
 
@@ -49,14 +47,13 @@ export class StudioAccessService {
 
   /** The teachers to whom one writes, owner first. */
   async teachersOf(studioId: string, connection: Connection = this.dataSource) {
-    const rows: { memberId: string; userId: string; email: string; name: string; role: StudioRole }[] =
-      await connection.query(
-        `SELECT m.id AS "memberId", u.id AS "userId", u.email, m.name, m.role
-         FROM studio_members m JOIN users u ON u.id = m.user_id
-         WHERE m.studio_id = $1 AND m.left_at IS NULL AND m.role <> 'pupil' AND u.suspended_at IS NULL
-         ORDER BY m.role DESC, m.joined_at, m.id`,
-        [studioId],
-      );
+    const rows: { memberId: string; userId: string; email: string }[] = await connection.query(
+      `SELECT m.id AS "memberId", u.id AS "userId", u.email
+       FROM studio_members m JOIN users u ON u.id = m.user_id
+       WHERE m.studio_id = $1 AND m.left_at IS NULL AND m.role <> 'pupil' AND u.suspended_at IS NULL
+       ORDER BY m.role DESC, m.joined_at, m.id`,
+      [studioId],
+    );
     return rows;
   }
 }

@@ -1,11 +1,13 @@
 import { HttpProblem } from "../http/httpProblem";
 import { idIn } from "../http/ownedCollection.router";
 
+/** What all routes for people in studios have in common. */
+export const forMembers = { tag: "studio", signedIn: true } as const;
+
 /** Answers that many routes of a studio give, as the API's description words them. */
 export const missingStudio = { description: "There is no such studio, or one is not in it." };
 export const teachersOnly = { description: "Only for teachers of the studio (teachers-only)." };
 export const ownerOnly = { description: "Only for the owner of the studio (owner-only)." };
-export const tooMany = { description: "Tried too often (too-many-tries); Retry-After tells the seconds to wait." };
 export const linkOver = { description: "The link is used up, too old, or taken back (link-not-valid)." };
 
 /** Of ids that whoever sends makes. */

@@ -30,7 +30,7 @@ export function studioParts(dataSource: DataSource, { tokenSecret }: { tokenSecr
   const partAccess = new PartAccessService(dataSource);
   const comments = new CommentsService(dataSource, partAccess);
   return {
-    ...{ dataSource, access, guardians, consent, partAccess, comments },
+    ...{ access, guardians, consent, comments },
     studios: new StudiosService(dataSource, access),
     members: new MembersService(dataSource, access),
     groups: new GroupsService(dataSource, access),

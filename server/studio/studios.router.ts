@@ -3,17 +3,16 @@ import type { Api } from "../http/api";
 import { currentUserId } from "../http/currentUser";
 import { idIn } from "../http/ownedCollection.router";
 import { parse } from "../http/parse";
-import { missingStudio, ownerOnly, studioIdIn } from "./studioAnswers";
+import { forMembers, missingStudio, ownerOnly, studioIdIn } from "./studioAnswers";
 import type { StudioParts } from "./studioParts";
 
 const studioSchema = { name: "Studio", schema: studio };
-const common = { tag: "studio", signedIn: true } as const;
 
 /** Studios and the people in them. */
 export function studiosRoutes(api: Api, { studios, members }: StudioParts): void {
   api.route(
     {
-      ...common,
+      ...forMembers,
       method: "get",
       path: "/studios",
       summary: "The studios that one teaches or is a pupil in, newest first",
@@ -26,7 +25,7 @@ export function studiosRoutes(api: Api, { studios, members }: StudioParts): void
 
   api.route(
     {
-      ...common,
+      ...forMembers,
       method: "post",
       path: "/studios",
       summary: "Open a studio and own it; a singer's account becomes a teacher's",
@@ -43,7 +42,7 @@ export function studiosRoutes(api: Api, { studios, members }: StudioParts): void
 
   api.route(
     {
-      ...common,
+      ...forMembers,
       method: "get",
       path: "/studios/:id",
       summary: "One studio, as a member of it sees it",
@@ -56,7 +55,7 @@ export function studiosRoutes(api: Api, { studios, members }: StudioParts): void
 
   api.route(
     {
-      ...common,
+      ...forMembers,
       method: "put",
       path: "/studios/:id",
       summary: "Change name and event, for its teachers; and for its owner how long recordings are kept",
@@ -75,7 +74,7 @@ export function studiosRoutes(api: Api, { studios, members }: StudioParts): void
 
   api.route(
     {
-      ...common,
+      ...forMembers,
       method: "delete",
       path: "/studios/:id",
       summary: "Delete a studio with its assignments, threads and takes; pupils keep the songs on their shelves",
@@ -89,7 +88,7 @@ export function studiosRoutes(api: Api, { studios, members }: StudioParts): void
 
   api.route(
     {
-      ...common,
+      ...forMembers,
       method: "put",
       path: "/studios/:id/members/:memberId",
       summary: "Change one's own name there; as the owner also somebody's role, or pass the studio on",
@@ -112,7 +111,7 @@ export function studiosRoutes(api: Api, { studios, members }: StudioParts): void
 
   api.route(
     {
-      ...common,
+      ...forMembers,
       method: "delete",
       path: "/studios/:id/members/:memberId",
       summary: "Leave, or as a teacher remove somebody; at once teachers see nothing of them any more",

@@ -2,6 +2,7 @@ import { randomUUID } from "node:crypto";
 import type { DataSource, EntityManager } from "typeorm";
 import type { NewStudio, Studio, StudioChange, StudioRole } from "../../shared/contract/studio/studio";
 import { HttpProblem, notFound } from "../http/httpProblem";
+import { lockAccounts } from "../http/ownedCollection.service";
 import { memberShares } from "./consent/digitalConsent";
 import { consentColumns, type ConsentRow, consentOf } from "./consent/memberConsent";
 import { StudioEntity } from "./studio.entity";
@@ -64,7 +65,7 @@ export class StudiosService {
   async make(userId: string, { name, teacherName, event, recordingsKeptDays }: NewStudio): Promise<Studio> {
     const id = randomUUID();
     await this.dataSource.transaction(async (manager) => {
-      await manager.query("SELECT FROM users WHERE id = $1 FOR NO KEY UPDATE", [userId]);
+      await lockAccounts(manager, [userId]);
       const owned = await manager.countBy(StudioEntity, { ownerId: userId });
       if (owned >= mostStudios)
         throw new HttpProblem(409, "collection-full", `An account keeps at most ${mostStudios} studios.`);

@@ -7,17 +7,18 @@ import {
   secondFactor,
   secondFactorSetup,
 } from "../../../shared/contract/account";
+import { addressOf } from "../../http/addressOf";
 import type { Api } from "../../http/api";
 import { currentSessionId, currentUserId } from "../../http/currentUser";
 import { HttpProblem } from "../../http/httpProblem";
 import { parse } from "../../http/parse";
-import { addressOf, type AuthParts, tellOwner } from "../authParts";
+import { tooMany } from "../../http/tryBucket";
+import { type AuthParts, tellOwner } from "../authParts";
 import { wrongCode } from "./secondFactor.service";
 
 const tag = "second factor";
 const codes = { name: "RecoveryCodes", schema: recoveryCodes };
 const both = { name: "PasswordAndCode", schema: passwordAndCodeRequest };
-const tooMany = { description: "Tried too often (too-many-tries); Retry-After tells the seconds to wait." };
 const wrong = { description: "The password (wrong-password) or the code (wrong-code) is wrong." };
 
 /** Codes of an authenticator app as a second step of signing in. */

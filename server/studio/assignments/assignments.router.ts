@@ -8,12 +8,11 @@ import type { Api } from "../../http/api";
 import { currentUserId } from "../../http/currentUser";
 import { idIn } from "../../http/ownedCollection.router";
 import { parse } from "../../http/parse";
-import { missingStudio, studioIdIn, teachersOnly } from "../studioAnswers";
+import { forMembers, missingStudio, studioIdIn, teachersOnly } from "../studioAnswers";
 import type { StudioParts } from "../studioParts";
 
 const assignmentSchema = { name: "Assignment", schema: assignment };
 const missing = { description: "There is no such assignment (not-found)." };
-const common = { tag: "studio", signedIn: true } as const;
 const one = "/studios/:id/assignments/:assignmentId";
 const idOf = (params: Record<string, string>) => idIn(params, "assignmentId", "assignment");
 
@@ -21,7 +20,7 @@ const idOf = (params: Record<string, string>) => idIn(params, "assignmentId", "a
 export function assignmentsRoutes(api: Api, { assignments }: StudioParts): void {
   api.route(
     {
-      ...common,
+      ...forMembers,
       method: "get",
       path: "/studios/:id/assignments",
       summary: "What was given in a studio, newest first, and how far it is",
@@ -42,7 +41,7 @@ export function assignmentsRoutes(api: Api, { assignments }: StudioParts): void 
 
   api.route(
     {
-      ...common,
+      ...forMembers,
       method: "post",
       path: "/studios/:id/assignments",
       summary:
@@ -66,7 +65,7 @@ export function assignmentsRoutes(api: Api, { assignments }: StudioParts): void 
 
   api.route(
     {
-      ...common,
+      ...forMembers,
       method: "get",
       path: one,
       summary: "One assignment with the part of each pupil",
@@ -79,7 +78,7 @@ export function assignmentsRoutes(api: Api, { assignments }: StudioParts): void 
 
   api.route(
     {
-      ...common,
+      ...forMembers,
       method: "put",
       path: one,
       summary: "Change the day it is due and the note to all",
@@ -94,7 +93,7 @@ export function assignmentsRoutes(api: Api, { assignments }: StudioParts): void 
 
   api.route(
     {
-      ...common,
+      ...forMembers,
       method: "delete",
       path: one,
       summary: "Take it back with threads and takes; pupils keep their copies of the song",

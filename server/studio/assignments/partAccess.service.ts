@@ -1,10 +1,10 @@
 import type { DataSource, EntityManager } from "typeorm";
 import type { Part } from "../../../shared/contract/studio/assignment";
 import type { StudioRole } from "../../../shared/contract/studio/studio";
-import { HttpProblem, notFound } from "../../http/httpProblem";
+import { notFound } from "../../http/httpProblem";
 import { memberShares } from "../consent/digitalConsent";
 import { keptDaysColumn } from "../consent/memberConsent";
-import { notAgreed } from "../studioAccess.service";
+import { notAgreed, teaches, teachersOnly } from "../studioAccess.service";
 
 type Connection = DataSource | EntityManager;
 
@@ -12,7 +12,6 @@ type Connection = DataSource | EntityManager;
 export interface PartAccess {
   partId: string;
   studioId: string;
-  assignmentId: string;
   /** whose part it is */
   pupil: { memberId: string; userId: string; name: string; email: string };
   /** the asker */
@@ -23,7 +22,6 @@ export interface PartAccess {
   /** the pupil agrees at this moment */
   shares: boolean;
   title: string;
-  state: Part["state"];
   recordingsKeptDays: number;
 }
 
@@ -44,7 +42,7 @@ export class PartAccessService {
   /** Whoever is neither the pupil nor a teacher of the studio, or has left, is told that there is no such part. */
   async reach(userId: string, partId: string, connection: Connection = this.dataSource): Promise<PartAccess> {
     const rows: Row[] = await connection.query(
-      `SELECT p.id AS "partId", p.studio_id AS "studioId", p.assignment_id AS "assignmentId", p.state,
+      `SELECT p.id AS "partId", p.studio_id AS "studioId",
               m.id AS "memberId", m.user_id AS "userId", m.name AS pupil, u.email, ${memberShares} AS shares,
               me.id AS "myMemberId", me.name AS "myName", me.role AS "myRole",
               a.song->>'title' AS title, ${keptDaysColumn}
@@ -65,14 +63,14 @@ export class PartAccessService {
       pupil: { memberId, userId: pupilId, name: pupil, email },
       me: { memberId: myMemberId, name: myName, role: myRole },
       side: memberId === myMemberId ? "pupil" : "teacher",
-      teaches: myRole !== "pupil",
+      teaches: teaches({ role: myRole }),
     };
   }
 
   /** The same for those who teach there. */
   async reachAsTeacher(userId: string, partId: string, connection?: Connection): Promise<PartAccess> {
     const access = await this.reach(userId, partId, connection);
-    if (!access.teaches) throw new HttpProblem(403, "teachers-only", "Only the teachers of this studio may do this.");
+    if (!access.teaches) throw teachersOnly();
     return access;
   }
 }

@@ -3,20 +3,20 @@ import type { Api } from "../../http/api";
 import { currentUserId } from "../../http/currentUser";
 import { idIn } from "../../http/ownedCollection.router";
 import { parse } from "../../http/parse";
+import { forMembers } from "../studioAnswers";
 import type { StudioParts } from "../studioParts";
 
 const partSchema = { name: "Part", schema: part };
 const commentSchema = { name: "Comment", schema: comment };
 const missing = { description: "There is no such part, or it is neither one's own nor in a studio one teaches in." };
 const notAgreed = { description: "The pupil does not agree at present that teachers see this (not-agreed)." };
-const common = { tag: "studio", signedIn: true } as const;
 const partIdIn = (params: Record<string, string>) => idIn(params, "id", "part");
 
 /** One pupil's part of an assignment, for the pupil and for the teachers, and its thread. */
 export function partsRoutes(api: Api, { parts, comments }: StudioParts): void {
   api.route(
     {
-      ...common,
+      ...forMembers,
       method: "get",
       path: "/parts",
       summary: "What I was given, in all my studios, newest first",
@@ -31,7 +31,7 @@ export function partsRoutes(api: Api, { parts, comments }: StudioParts): void {
 
   api.route(
     {
-      ...common,
+      ...forMembers,
       method: "get",
       path: "/parts/:id",
       summary: "One part: the song, the key and way, notes and state",
@@ -44,7 +44,7 @@ export function partsRoutes(api: Api, { parts, comments }: StudioParts): void {
 
   api.route(
     {
-      ...common,
+      ...forMembers,
       method: "put",
       path: "/parts/:id",
       summary: "As a teacher: another key, way or note, or the answer to what was handed in (the pupil gets a mail)",
@@ -64,7 +64,7 @@ export function partsRoutes(api: Api, { parts, comments }: StudioParts): void {
 
   api.route(
     {
-      ...common,
+      ...forMembers,
       method: "get",
       path: "/parts/:id/comments",
       summary: "The thread of a part, oldest first",
@@ -81,7 +81,7 @@ export function partsRoutes(api: Api, { parts, comments }: StudioParts): void {
 
   api.route(
     {
-      ...common,
+      ...forMembers,
       method: "post",
       path: "/parts/:id/comments",
       summary: "Write into the thread; with a take and a time, if the words stand there. May be repeated by its id",
@@ -101,7 +101,7 @@ export function partsRoutes(api: Api, { parts, comments }: StudioParts): void {
 
   api.route(
     {
-      ...common,
+      ...forMembers,
       method: "delete",
       path: "/parts/:id/comments/:commentId",
       summary: "Take back what one wrote oneself",

@@ -1,3 +1,4 @@
+import type { Request } from "express";
 import {
   consentRequest,
   guardianLook,
@@ -6,17 +7,25 @@ import {
   linkRequest,
 } from "../../../shared/contract/studio/consent";
 import { studio } from "../../../shared/contract/studio/studio";
+import { addressOf } from "../../http/addressOf";
 import type { Api } from "../../http/api";
 import { currentUserId } from "../../http/currentUser";
 import { HttpProblem } from "../../http/httpProblem";
 import { parse } from "../../http/parse";
-import { linkOver, missingStudio, studioIdIn, tooMany } from "../studioAnswers";
+import { tooMany } from "../../http/tryBucket";
+import { linkOver, missingStudio, studioIdIn } from "../studioAnswers";
 import type { StudioParts } from "../studioParts";
 
 const link = { name: "Link", schema: linkRequest };
 
 /** What pupils agree to, and the guardians of those who are too young to agree alone. */
 export function consentRoutes(api: Api, { access, studios, consent, guardians, limits }: StudioParts): void {
+  const tokenIn = async (req: Request<Record<string, string>>) => {
+    const { token } = parse(linkRequest, req.body);
+    await limits.link.take(addressOf(req));
+    return token;
+  };
+
   api.route(
     {
       method: "put",
@@ -95,8 +104,7 @@ export function consentRoutes(api: Api, { access, studios, consent, guardians, l
       },
     },
     async (req, res) => {
-      const { token } = parse(linkRequest, req.body);
-      await limits.link.take(req.ip ?? "");
+      const token = await tokenIn(req);
       const seen = await guardians.look(token);
       if (!seen) throw linkNotValid();
       res.json(seen);
@@ -114,8 +122,7 @@ export function consentRoutes(api: Api, { access, studios, consent, guardians, l
       answers: { 204: { description: "Agreed." }, 410: linkOver, 429: tooMany },
     },
     async (req, res) => {
-      const { token } = parse(linkRequest, req.body);
-      await limits.link.take(req.ip ?? "");
+      const token = await tokenIn(req);
       if (!(await guardians.confirm(token))) throw linkNotValid();
       res.status(204).end();
     },
@@ -133,8 +140,7 @@ export function consentRoutes(api: Api, { access, studios, consent, guardians, l
       answers: { 204: { description: "Taken back." }, 410: linkOver, 429: tooMany },
     },
     async (req, res) => {
-      const { token } = parse(linkRequest, req.body);
-      await limits.link.take(req.ip ?? "");
+      const token = await tokenIn(req);
       if (!(await guardians.withdraw(token))) throw linkNotValid();
       res.status(204).end();
     },

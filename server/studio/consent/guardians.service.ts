@@ -27,6 +27,14 @@ const page = "/guardian";
 
 type Connection = DataSource | EntityManager;
 
+/** A link from one of the mails, and whose guardian it went to. */
+interface GuardianLink {
+  userId: string;
+  email: string;
+  /** it came with the question; else with the mail that is kept after a yes */
+  asks: boolean;
+}
+
 interface AskedStudio {
   name: string;
   pupil: string;
@@ -134,10 +142,9 @@ export class GuardiansService {
 
   /** What the link is about; null if it is not one of ours any more. */
   async look(token: string): Promise<GuardianLook | null> {
-    const found = await this.pupilOf(this.dataSource, token);
-    if (found === null) return null;
-    const { userId, purpose } = found;
-    const studios = await this.studiosOf(this.dataSource, userId);
+    const found = await this.linkOf(this.dataSource, token, "look");
+    if (!found) return null;
+    const studios = await this.studiosOf(this.dataSource, found.userId);
     return {
       pupil: studios[0]?.pupil ?? "",
       studios: studios.map(({ name, teachers, recordingsKeptDays, waits }) => ({
@@ -145,7 +152,7 @@ export class GuardiansService {
         confirmed: !waits,
       })),
       sees: whatTeachersSee(Math.max(1, ...studios.map(({ recordingsKeptDays }) => recordingsKeptDays))),
-      link: purpose === keepPurpose ? "keep" : "ask",
+      link: found.asks ? "ask" : "keep",
       confirmed: studios.length > 0 && studios.every(({ waits }) => !waits),
     };
   }
@@ -153,10 +160,9 @@ export class GuardiansService {
   /** The guardian's word, for every studio that waits for it; a mail brings the link by which it can be taken back. */
   async confirm(token: string): Promise<boolean> {
     return this.dataSource.transaction(async (manager) => {
-      const spent = await this.tokens.spend(manager, askPurpose, token);
-      const kept = spent ?? (await this.tokens.look(manager, keepPurpose, token));
-      const userId = kept?.subject;
-      if (!kept || !userId || !(await this.isStillHere(manager, userId))) return false;
+      const found = await this.linkOf(manager, token, "spend");
+      if (!found) return false;
+      const { userId, email, asks } = found;
       const studios = (await this.studiosOf(manager, userId)).filter(({ waits }) => waits);
       await manager.query(
         `UPDATE studio_members m SET guardian_agreed_at = now(), guardian_refused_at = NULL,
@@ -167,16 +173,16 @@ export class GuardiansService {
       );
       await manager.query(
         "UPDATE guardians SET confirmed_at = now(), withdrawn_at = NULL WHERE user_id = $1 AND email = $2",
-        [userId, kept.email],
+        [userId, email],
       );
-      if (!spent) return true;
+      if (!asks) return true;
       const keep = await this.tokens.issue(manager, {
-        ...{ purpose: keepPurpose, email: kept.email, lifeS: keepLifeS, subject: userId, onlyOfAddress: true },
+        ...{ purpose: keepPurpose, email, lifeS: keepLifeS, subject: userId, onlyOfAddress: true },
       });
       await enqueueMail(manager, {
         event: `guardian-kept:${keep.id}`,
         kind: "guardianKept",
-        to: kept.email,
+        to: email,
         userId,
         data: { pupil: studios[0]?.pupil ?? "", studio: listWords(studios.map(({ name }) => name)) },
         path: page,
@@ -192,13 +198,13 @@ export class GuardiansService {
    */
   async withdraw(token: string): Promise<boolean> {
     return this.dataSource.transaction(async (manager) => {
-      const spent = await this.tokens.spend(manager, askPurpose, token);
-      const userId = (spent ?? (await this.tokens.look(manager, keepPurpose, token)))?.subject;
-      if (!userId || !(await this.isStillHere(manager, userId))) return false;
+      const found = await this.linkOf(manager, token, "spend");
+      if (!found) return false;
+      const { userId, asks } = found;
       await manager.query(
         `UPDATE studio_members SET guardian_agreed_at = NULL, guardian_refused_at = now()
          WHERE user_id = $1 AND consent_given_at IS NOT NULL AND (guardian_agreed_at IS NULL OR NOT $2)`,
-        [userId, spent !== null],
+        [userId, asks],
       );
       await manager.query(
         `UPDATE guardians SET withdrawn_at = now() WHERE user_id = $1 AND NOT EXISTS (
@@ -236,17 +242,14 @@ export class GuardiansService {
     return true;
   }
 
-  private async pupilOf(connection: Connection, token: string): Promise<{ userId: string; purpose: string } | null> {
-    for (const purpose of purposes) {
-      const userId = (await this.tokens.look(connection, purpose, token))?.subject;
-      if (userId && (await this.isStillHere(connection, userId))) return { userId, purpose };
-    }
-    return null;
-  }
-
-  private async isStillHere(connection: Connection, userId: string): Promise<boolean> {
-    const rows: object[] = await connection.query("SELECT FROM guardians WHERE user_id = $1", [userId]);
-    return rows.length > 0;
+  /** Null if it is good no more, or the pupil is not there any more. One that asks can be spent once, one that is kept never. */
+  private async linkOf(connection: Connection, token: string, use: "look" | "spend"): Promise<GuardianLink | null> {
+    const asking = await this.tokens[use](connection, askPurpose, token);
+    const link = asking ?? (await this.tokens.look(connection, keepPurpose, token));
+    if (!link?.subject) return null;
+    const { subject: userId, email } = link;
+    const known: object[] = await connection.query("SELECT FROM guardians WHERE user_id = $1", [userId]);
+    return known.length === 0 ? null : { userId, email, asks: asking !== null };
   }
 
   /** Those in which the pupil agreed, whether or not a guardian has. */

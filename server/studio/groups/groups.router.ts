@@ -3,20 +3,19 @@ import type { Api } from "../../http/api";
 import { currentUserId } from "../../http/currentUser";
 import { idIn } from "../../http/ownedCollection.router";
 import { parse } from "../../http/parse";
-import { missingStudio, studioIdIn, teachersOnly } from "../studioAnswers";
+import { forMembers, missingStudio, studioIdIn, teachersOnly } from "../studioAnswers";
 import type { StudioParts } from "../studioParts";
 
 const group = { name: "StudioGroup", schema: studioGroup };
 const request = { name: "GroupRequest", schema: groupRequest };
 const missing = { description: "There is no such group (not-found)." };
-const common = { tag: "studio", signedIn: true } as const;
 const groupIdIn = (params: Record<string, string>) => idIn(params, "groupId", "group");
 
 /** Groups of pupils, and the one key that a group sings a song in; for teachers. */
 export function groupsRoutes(api: Api, { groups }: StudioParts): void {
   api.route(
     {
-      ...common,
+      ...forMembers,
       method: "get",
       path: "/studios/:id/groups",
       summary: "The groups of a studio with their keys, oldest first",
@@ -33,7 +32,7 @@ export function groupsRoutes(api: Api, { groups }: StudioParts): void {
 
   api.route(
     {
-      ...common,
+      ...forMembers,
       method: "post",
       path: "/studios/:id/groups",
       summary: "Make a group of pupils",
@@ -53,7 +52,7 @@ export function groupsRoutes(api: Api, { groups }: StudioParts): void {
 
   api.route(
     {
-      ...common,
+      ...forMembers,
       method: "put",
       path: "/studios/:id/groups/:groupId",
       summary: "Change a group's name and who is in it; its keys stay",
@@ -68,7 +67,7 @@ export function groupsRoutes(api: Api, { groups }: StudioParts): void {
 
   api.route(
     {
-      ...common,
+      ...forMembers,
       method: "delete",
       path: "/studios/:id/groups/:groupId",
       summary: "Delete a group; the pupils stay in the studio",
@@ -82,7 +81,7 @@ export function groupsRoutes(api: Api, { groups }: StudioParts): void {
 
   api.route(
     {
-      ...common,
+      ...forMembers,
       method: "put",
       path: "/studios/:id/groups/:groupId/key",
       summary: "Keep the key of the group for a song, with each pupil's way; takes the place of the one before",

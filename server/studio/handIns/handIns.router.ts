@@ -7,6 +7,7 @@ import { idIn } from "../../http/ownedCollection.router";
 import { parse } from "../../http/parse";
 import { TryBucket } from "../../http/tryBucket";
 import type { ObjectStore } from "../../storage/objectStore.service";
+import { forMembers } from "../studioAnswers";
 import { HandInsService } from "./handIns.service";
 
 const announcedInAnHour = 120;
@@ -20,12 +21,11 @@ const down = { description: "The storage does not answer (storage-down); what wa
 export function handInsRoutes(api: Api, dataSource: DataSource, objects: ObjectStore): void {
   const handIns = new HandInsService(dataSource, objects);
   const announcing = new TryBucket(dataSource, "hand-in", announcedInAnHour, 3600);
-  const common = { tag: "studio", signedIn: true } as const;
   const idOf = (params: Record<string, string>) => idIn(params, "id", "recording");
 
   api.route(
     {
-      ...common,
+      ...forMembers,
       method: "post",
       path: "/parts/:id/hand-ins",
       summary: "Announce a recording for this part; then send its bytes to /uploads/<its id>. May be repeated",
@@ -48,7 +48,7 @@ export function handInsRoutes(api: Api, dataSource: DataSource, objects: ObjectS
   );
   api.route(
     {
-      ...common,
+      ...forMembers,
       method: "get",
       path: "/parts/:id/hand-ins",
       summary: "The recordings in the thread of this part, oldest first, deleted ones as such",
@@ -60,7 +60,7 @@ export function handInsRoutes(api: Api, dataSource: DataSource, objects: ObjectS
   );
   api.route(
     {
-      ...common,
+      ...forMembers,
       method: "get",
       path: "/hand-ins/:id",
       summary: "One recording, without its sound",
@@ -72,7 +72,7 @@ export function handInsRoutes(api: Api, dataSource: DataSource, objects: ObjectS
   );
   api.route(
     {
-      ...common,
+      ...forMembers,
       method: "get",
       path: "/hand-ins/:id/sound",
       summary: "A signed link by which a recording can be played for five minutes",
@@ -90,7 +90,7 @@ export function handInsRoutes(api: Api, dataSource: DataSource, objects: ObjectS
   );
   api.route(
     {
-      ...common,
+      ...forMembers,
       method: "delete",
       path: "/hand-ins/:id",
       summary: "Take a recording of one's own back: out of the thread at once, and deleted from the storage",
@@ -106,7 +106,7 @@ export function handInsRoutes(api: Api, dataSource: DataSource, objects: ObjectS
     },
   );
 
-  const upload = { ...common, path: "/uploads/:id" } as const;
+  const upload = { ...forMembers, path: "/uploads/:id" } as const;
   const uploadAnswers = {
     403: { description: "Not the asker's own (not-yours), or consent is missing (not-agreed)." },
     404: missing,

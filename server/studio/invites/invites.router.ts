@@ -1,17 +1,18 @@
 import { linkRequest } from "../../../shared/contract/studio/consent";
 import { invite, inviteAcceptance, inviteLook, inviteRequest } from "../../../shared/contract/studio/invite";
 import { studio } from "../../../shared/contract/studio/studio";
+import { addressOf } from "../../http/addressOf";
 import type { Api } from "../../http/api";
 import { currentUserId } from "../../http/currentUser";
 import { HttpProblem } from "../../http/httpProblem";
 import { idIn } from "../../http/ownedCollection.router";
 import { parse } from "../../http/parse";
-import { linkOver, missingStudio, studioIdIn, teachersOnly, tooMany } from "../studioAnswers";
+import { tooMany } from "../../http/tryBucket";
+import { forMembers, linkOver, missingStudio, studioIdIn, teachersOnly } from "../studioAnswers";
 import type { StudioParts } from "../studioParts";
 
 const inviteSchema = { name: "Invite", schema: invite };
 const missing = { description: "There is no such invitation (not-found)." };
-const common = { tag: "studio", signedIn: true } as const;
 
 const teachersOrOwner = {
   description: "Not a teacher (teachers-only), or to invite a teacher and not the owner (owner-only).",
@@ -21,7 +22,7 @@ const teachersOrOwner = {
 export function invitesRoutes(api: Api, { invites, studios, limits }: StudioParts): void {
   api.route(
     {
-      ...common,
+      ...forMembers,
       method: "get",
       path: "/studios/:id/invites",
       summary: "The invitations of a studio, newest first, with those that are over",
@@ -38,7 +39,7 @@ export function invitesRoutes(api: Api, { invites, studios, limits }: StudioPart
 
   api.route(
     {
-      ...common,
+      ...forMembers,
       method: "post",
       path: "/studios/:id/invites",
       summary: "Invite by mail, each by a link that is good once, for seven days; only the owner invites co-teachers",
@@ -61,7 +62,7 @@ export function invitesRoutes(api: Api, { invites, studios, limits }: StudioPart
 
   api.route(
     {
-      ...common,
+      ...forMembers,
       method: "post",
       path: "/studios/:id/invites/:inviteId/resend",
       summary: "Send a new link, good for seven days from now; the old one is worth nothing then",
@@ -83,7 +84,7 @@ export function invitesRoutes(api: Api, { invites, studios, limits }: StudioPart
 
   api.route(
     {
-      ...common,
+      ...forMembers,
       method: "delete",
       path: "/studios/:id/invites/:inviteId",
       summary: "Take an invitation back; its link is worth nothing from now on",
@@ -112,7 +113,7 @@ export function invitesRoutes(api: Api, { invites, studios, limits }: StudioPart
     },
     async (req, res) => {
       const { token } = parse(linkRequest, req.body);
-      await limits.link.take(req.ip ?? "");
+      await limits.link.take(addressOf(req));
       const seen = await invites.look(token);
       if (!seen) throw linkNotValid();
       res.json(seen);
@@ -121,7 +122,7 @@ export function invitesRoutes(api: Api, { invites, studios, limits }: StudioPart
 
   api.route(
     {
-      ...common,
+      ...forMembers,
       method: "post",
       path: "/invites/accept",
       summary: "Join the studio, with any account; agreeing to be seen may also come later",
@@ -135,7 +136,7 @@ export function invitesRoutes(api: Api, { invites, studios, limits }: StudioPart
     },
     async (req, res) => {
       const acceptance = parse(inviteAcceptance, req.body);
-      await limits.link.take(req.ip ?? "");
+      await limits.link.take(addressOf(req));
       const userId = currentUserId(res);
       const studioId = await invites.accept(userId, acceptance);
       if (studioId === null) throw linkNotValid();

@@ -2,6 +2,7 @@ import { randomUUID } from "node:crypto";
 import type { DataSource, EntityManager } from "typeorm";
 import { whatTeachersSee } from "../../../shared/contract/studio/whatTeachersSee";
 import type { Invite, InviteAcceptance, InviteLook, InviteRequest } from "../../../shared/contract/studio/invite";
+import { confirmAddress } from "../../auth/accounts.service";
 import { HttpProblem, notFound } from "../../http/httpProblem";
 import type { LinkTokensService } from "../../mail/linkTokens.service";
 import { enqueueMail } from "../../mail/mail.service";
@@ -154,6 +155,7 @@ export class InvitesService {
           studioId,
         ]);
       if (role === "co-teacher") await becomeTeacher(manager, userId);
+      // Whoever has the link reads the mails of that address: if it is the account's own, nobody needs to ask again.
       await confirmAddress(manager, userId, spent.email);
       if (agree) await this.consent.give(manager, memberId, userId);
       return studioId;
@@ -188,16 +190,6 @@ export class InvitesService {
     });
     return toInvite(invite);
   }
-}
-
-/** Whoever has the link reads the mails of that address: if it is the account's own, nobody needs to ask again. */
-async function confirmAddress(manager: EntityManager, userId: string, email: string): Promise<void> {
-  await manager.query("SELECT pg_advisory_xact_lock(8400003, hashtext(lower($1)))", [email]);
-  await manager.query(
-    `UPDATE users SET confirmed_at = now() WHERE id = $1 AND lower(email) = lower($2) AND confirmed_at IS NULL
-       AND NOT EXISTS (SELECT FROM users WHERE lower(email) = lower($2) AND confirmed_at IS NOT NULL)`,
-    [userId, email],
-  );
 }
 
 function toInvite({ id, email, role, groupId, sentAt, expiresAt, acceptedAt, revokedAt }: StudioInviteEntity): Invite {

@@ -1,11 +1,11 @@
 import { rosterRow } from "../../../shared/contract/studio/roster";
 import type { Api } from "../../http/api";
 import { currentUserId } from "../../http/currentUser";
-import { missingStudio, studioIdIn, teachersOnly } from "../studioAnswers";
+import { forMembers, missingStudio, studioIdIn, teachersOnly } from "../studioAnswers";
 import type { StudioParts } from "../studioParts";
 import { rosterCsv } from "./rosterCsv";
 
-const common = { tag: "studio", signedIn: true, method: "get" } as const;
+const common = { ...forMembers, method: "get" } as const;
 
 /** The roster, for teachers. */
 export function rosterRoutes(api: Api, { roster, groups }: StudioParts): void {

@@ -7,29 +7,13 @@ import { createDataSource } from "../../server/database/dataSource";
 import { createLogger } from "../../server/http/requestLog";
 import { ObjectStore } from "../../server/storage/objectStore.service";
 import type { HandIn, SoundLink } from "../../shared/contract/studio/handIn";
-import { aHandIn, aWav, from, handIn, partInStudio, type PartInStudio, storageKeyOf, tus } from "./partInStudio";
-import { Person, startTestServer, type TestServer, tokenSecret } from "./testServer";
+import { aHandIn, aWav, from, handIn, type PartInStudio, storageKeyOf, tus } from "./partInStudio";
+import { setPartStage } from "./partStage";
+import { Person, type TestServer, tokenSecret } from "./testServer";
 
 let server: TestServer;
 let place: PartInStudio;
-beforeAll(async () => {
-  server = await startTestServer();
-});
-afterAll(() => server.close());
-beforeEach(async () => {
-  server.s3.down = false;
-  server.s3.refuses = () => false;
-  place = await partInStudio(server);
-  server.smtp.mails.length = 0;
-});
-
-const listed = async (person: Person): Promise<HandIn[]> =>
-  (await person.get(`/api/parts/${place.partId}/hand-ins`).expect(200)).body;
-const partState = async () =>
-  (await server.database.query("SELECT state, effort FROM assignment_parts WHERE id = $1", [place.partId]))[0];
-const held = async (key: string) => (await server.s3.keys()).filter((each) => each.startsWith(key));
-const recordOf = async (key: string) =>
-  (await server.database.query("SELECT why, deleted_at FROM deletion_records WHERE storage_key = $1", [key]))[0];
+const { listed, partState, held, recordOf } = setPartStage((stage) => ({ server, place } = stage));
 
 async function until(done: () => Promise<boolean>): Promise<void> {
   for (const end = Date.now() + 15_000; !(await done());) {

@@ -1,46 +1,19 @@
-import { strFromU8, unzipSync } from "fflate";
-import type { HandIn } from "../../shared/contract/studio/handIn";
+import { strFromU8 } from "fflate";
+import { exportOf } from "./exportOf";
 import { aHandIn, aWav, from, handIn, partInStudio, type PartInStudio, storageKeyOf } from "./partInStudio";
-import { type Person, startTestServer, type TestServer } from "./testServer";
+import { setPartStage } from "./partStage";
+import type { TestServer } from "./testServer";
 
 let server: TestServer;
 let place: PartInStudio;
-beforeAll(async () => {
-  server = await startTestServer();
-});
-afterAll(() => server.close());
-beforeEach(async () => {
-  server.s3.down = false;
-  place = await partInStudio(server);
-  server.smtp.mails.length = 0;
-});
+const { listed, partState, held, recordOf } = setPartStage((stage) => ({ server, place } = stage));
 
-const listed = async (person: Person): Promise<HandIn[]> =>
-  (await person.get(`/api/parts/${place.partId}/hand-ins`).expect(200)).body;
-const partState = async () =>
-  (await server.database.query("SELECT state, effort FROM assignment_parts WHERE id = $1", [place.partId]))[0];
 const withdraw = () => place.pupil.put(`/api/studios/${place.studioId}/consent`, { agree: false }).expect(200);
 const sweep = async () => {
   await server.database.query("SELECT larkspan_jobs.add_job('deleteTakes')");
   await server.runJobs();
 };
 const keyOf = (id: string) => storageKeyOf(server, id);
-const held = async (key: string) => (await server.s3.keys()).filter((each) => each.startsWith(key));
-const recordOf = async (key: string) =>
-  (await server.database.query("SELECT why, deleted_at FROM deletion_records WHERE storage_key = $1", [key]))[0];
-
-async function exported() {
-  const { body } = await place.pupil
-    .get("/api/account/export")
-    .buffer(true)
-    .parse((res, done) => {
-      const chunks: Buffer[] = [];
-      res.on("data", (chunk: Buffer) => chunks.push(chunk));
-      res.on("end", () => done(null, Buffer.concat(chunks)));
-    })
-    .expect(200);
-  return unzipSync(new Uint8Array(body as Buffer));
-}
 
 describe("without consent", () => {
   it("nothing is recorded to the server and the teacher hears nothing, from the moment it is withdrawn", async () => {
@@ -258,7 +231,7 @@ describe("going", () => {
     const other = await partInStudio(server, { teacher: place.teacher });
     const wav = aWav(3000);
     const [mine, others] = [await handIn(place.pupil, place.partId, {}, wav), await handIn(other.pupil, other.partId)];
-    const files = await exported();
+    const files = await exportOf(place.pupil);
     expect(Buffer.from(files[`handed-in/takes/${mine}.wav`]!).equals(wav)).toBe(true);
     expect(Object.keys(files).join()).not.toContain(others);
     expect(JSON.parse(strFromU8(files["handed-in/hand-ins.json"]!))).toMatchObject([{ id: mine, state: "ready" }]);
@@ -267,7 +240,7 @@ describe("going", () => {
   it("the export comes also while the storage does not answer, and says which sounds are missing", async () => {
     const id = await handIn(place.pupil, place.partId);
     server.s3.down = true;
-    const files = await exported();
+    const files = await exportOf(place.pupil);
     expect(strFromU8(files["handed-in/not-read.txt"]!)).toContain(id);
     expect(JSON.parse(strFromU8(files["handed-in/hand-ins.json"]!))).toMatchObject([{ id, state: "ready" }]);
   });

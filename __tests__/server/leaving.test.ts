@@ -1,6 +1,6 @@
-import { strFromU8, unzipSync } from "fflate";
 import { aSong, aVoice } from "./belongings";
 import { another, clearTraces, confirmedPerson, mailTo as newestMail, postAuth } from "./confirmedPerson";
+import { exportedTexts } from "./exportOf";
 import { password, startTestServer, type TestServer } from "./testServer";
 
 let server: TestServer;
@@ -62,19 +62,7 @@ describe("leaving", () => {
     const [person, other] = [await confirmed(), await confirmed()];
     const song = aSong({ title: "Nets / in: the Loft" });
     await person.put(`/api/songs/${song.id}`, song).expect(201);
-    const answer = await person
-      .get("/api/account/export")
-      .buffer(true)
-      .parse((res, done) => {
-        const chunks: Buffer[] = [];
-        res.on("data", (chunk: Buffer) => chunks.push(chunk));
-        res.on("end", () => done(null, Buffer.concat(chunks)));
-      })
-      .expect(200)
-      .expect("Content-Type", "application/zip");
-    const files = Object.fromEntries(
-      Object.entries(unzipSync(new Uint8Array(answer.body as Buffer))).map(([name, bytes]) => [name, strFromU8(bytes)]),
-    );
+    const files = await exportedTexts(person);
     expect(files[`songs/charts/Nets in the Loft ${song.id.slice(0, 8)}.txt`]).toBe(song.chart);
     expect(JSON.parse(files["songs/songs.json"]!)).toMatchObject([{ id: song.id }]);
     expect(files["account/account.json"]).toContain(person.email);

@@ -10,21 +10,15 @@ import type { Decision } from "../../../shared/contract/decision";
 import { song as songSchema } from "../../../shared/contract/song";
 import { aDecision, aSong, aTake, aVoice } from "../belongings";
 import { clearTraces, mailTo } from "../confirmedPerson";
-import { Person, startTestServer, type TestServer } from "../testServer";
+import { Person, type TestServer } from "../testServer";
 import { aPart, give, join, pupilIn, studioOf } from "./studioPeople";
+import { setStudioStage } from "./studioStage";
 
 let server: TestServer;
 let teacher: Person;
 let studioId: string;
-beforeAll(async () => {
-  server = await startTestServer();
-});
-afterAll(() => server.close());
-beforeEach(async () => {
-  await clearTraces(server);
-  teacher = await Person.put(server, "teacher", true);
-  studioId = (await studioOf(teacher)).id;
-});
+setStudioStage((stage) => ({ server, teacher, studioId } = stage));
+beforeEach(() => clearTraces(server));
 
 const at = () => `/api/studios/${studioId}/assignments`;
 

@@ -4,21 +4,15 @@ import { guardianLook, guardianState } from "../../../shared/contract/studio/con
 import type { RosterRow } from "../../../shared/contract/studio/roster";
 import { anInstrument, aTake, aVoice } from "../belongings";
 import { clearTraces, mailTo } from "../confirmedPerson";
-import { Person, startTestServer, type TestServer } from "../testServer";
+import { Person, type TestServer } from "../testServer";
 import { give, join, pupilIn, studioOf } from "./studioPeople";
+import { setStudioStage } from "./studioStage";
 
 let server: TestServer;
 let teacher: Person;
 let studioId: string;
-beforeAll(async () => {
-  server = await startTestServer();
-});
-afterAll(() => server.close());
-beforeEach(async () => {
-  await clearTraces(server);
-  teacher = await Person.put(server, "singer", true);
-  studioId = (await studioOf(teacher)).id;
-});
+setStudioStage((stage) => ({ server, teacher, studioId } = stage));
+beforeEach(() => clearTraces(server));
 
 const thisYear = new Date().getUTCFullYear();
 const agree = (person: Person, yes: boolean, id = studioId) => person.put(`/api/studios/${id}/consent`, { agree: yes });

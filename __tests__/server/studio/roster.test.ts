@@ -2,20 +2,14 @@ import { randomUUID } from "node:crypto";
 import { rosterRow, type RosterRow } from "../../../shared/contract/studio/roster";
 import { type StudioGroup, studioGroup } from "../../../shared/contract/studio/group";
 import { anInstrument, aTake, aVoice, someWishes } from "../belongings";
-import { Person, startTestServer, type TestServer } from "../testServer";
-import { aPart, give, join, pupilIn, studioOf } from "./studioPeople";
+import { Person, type TestServer } from "../testServer";
+import { aPart, give, join, pupilIn } from "./studioPeople";
+import { setStudioStage } from "./studioStage";
 
 let server: TestServer;
 let teacher: Person;
 let studioId: string;
-beforeAll(async () => {
-  server = await startTestServer();
-});
-afterAll(() => server.close());
-beforeEach(async () => {
-  teacher = await Person.put(server, "teacher", true);
-  studioId = (await studioOf(teacher)).id;
-});
+setStudioStage((stage) => ({ server, teacher, studioId } = stage));
 
 const roster = async (person = teacher): Promise<RosterRow[]> => {
   const { body } = await person.get(`/api/studios/${studioId}/roster`).expect(200);

@@ -1,21 +1,15 @@
-import { strFromU8, unzipSync } from "fflate";
 import { clearTraces, mailTo } from "../confirmedPerson";
-import { Person, startTestServer, type TestServer } from "../testServer";
-import { give, join, pupilIn, studioOf } from "./studioPeople";
+import { exportedTexts } from "../exportOf";
+import { Person, type TestServer } from "../testServer";
+import { give, join, pupilIn } from "./studioPeople";
+import { setStudioStage } from "./studioStage";
 
 let server: TestServer;
 let teacher: Person;
 let studioId: string;
-beforeAll(async () => {
-  server = await startTestServer();
-});
-afterAll(() => server.close());
-beforeEach(async () => {
-  await clearTraces(server);
-  await server.database.query("DELETE FROM studios");
-  teacher = await Person.put(server, "teacher", true);
-  studioId = (await studioOf(teacher)).id;
-});
+setStudioStage((stage) => ({ server, teacher, studioId } = stage));
+beforeEach(() => clearTraces(server));
+afterEach(() => server.database.query("DELETE FROM studios"));
 
 async function erase(person: Person): Promise<void> {
   await server.database.query("UPDATE users SET erase_at = now() WHERE id = $1", [person.id]);
@@ -30,28 +24,14 @@ it("is in the export: memberships and words of a pupil, what a teacher gave; not
   const partOf = (memberId: string) => made.parts.find((part) => part.memberId === memberId)!.id;
   await lowri.person.post(`/api/parts/${partOf(lowri.memberId)}/comments`, { text: "High there." }).expect(201);
   await joss.person.post(`/api/parts/${partOf(joss.memberId)}/comments`, { text: "Secret of Joss." }).expect(201);
-  const exported = async (person: Person) => {
-    const answer = await person
-      .get("/api/account/export")
-      .buffer(true)
-      .parse((res, done) => {
-        const chunks: Buffer[] = [];
-        res.on("data", (chunk: Buffer) => chunks.push(chunk));
-        res.on("end", () => done(null, Buffer.concat(chunks)));
-      })
-      .expect(200);
-    return Object.fromEntries(
-      Object.entries(unzipSync(new Uint8Array(answer.body as Buffer))).map(([name, bytes]) => [name, strFromU8(bytes)]),
-    );
-  };
-  const files = await exported(lowri.person);
+  const files = await exportedTexts(lowri.person);
   expect(JSON.parse(files["studio/memberships.json"]!)).toMatchObject([
     { studio: "Tuesday evening class", role: "pupil", name: "Lowri Tate" },
   ]);
   expect(JSON.parse(files["studio/parts.json"]!)).toMatchObject([{ title: "Nets in the Loft", tonic: "Bb" }]);
   expect(JSON.parse(files["studio/comments.json"]!)).toMatchObject([{ text: "High there." }]);
   expect(Object.values(files).join("\n")).not.toMatch(/Joss/);
-  const ofTeacher = await exported(teacher);
+  const ofTeacher = await exportedTexts(teacher);
   expect(JSON.parse(ofTeacher["studio/given.json"]!)).toMatchObject([{ note: "Softly." }]);
   expect(Object.values(ofTeacher).join("\n")).not.toMatch(/Secret|Lowri|Joss/);
 });

@@ -1,6 +1,6 @@
 import { z } from "zod";
 
-const email = z.email("Write an e-mail address, like name@example.org.").max(254);
+export const email = z.email("Write an e-mail address, like name@example.org.").max(254);
 const newPassword = z.string().min(12, "Use at least 12 characters.").max(128, "Use at most 128 characters.");
 const password = z.string().min(1, "Type your password.").max(128);
 const linkToken = z.string().min(1).max(200);

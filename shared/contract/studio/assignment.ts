@@ -62,6 +62,9 @@ export type AssignmentRequest = z.infer<typeof assignmentRequest>;
 const partState = z.enum(["assigned", "handed-in", "returned", "accepted"]);
 export type PartState = z.infer<typeof partState>;
 
+/** The newest take handed in: when, and how it felt. */
+export const lastTake = z.strictObject({ at: z.iso.datetime(), effort: z.int().min(1).max(5).nullable() }).nullable();
+
 /** A pupil's part of an assignment, as its teachers see it in a table. Without consent only the name tells something. */
 const partRow = z.strictObject({
   id: z.uuid(),
@@ -70,8 +73,7 @@ const partRow = z.strictObject({
   shares: z.boolean(),
   ...partKey,
   state: partState,
-  /** the newest take handed in */
-  lastTake: z.strictObject({ at: z.iso.datetime(), effort: z.int().min(1).max(5).nullable() }).nullable(),
+  lastTake,
 });
 export type PartRow = z.infer<typeof partRow>;
 
@@ -132,7 +134,7 @@ export const part = z.strictObject({
   /** what the teacher wrote to all, and to this pupil */
   note: z.string(),
   partNote: z.string(),
-  lastTake: partRow.shape.lastTake,
+  lastTake,
   recordingsKeptDays: z.int(),
 });
 export type Part = z.infer<typeof part>;

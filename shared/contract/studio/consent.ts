@@ -1,4 +1,5 @@
 import { z } from "zod";
+import { email } from "../account";
 
 /** What a member agreed to. Teachers see nothing of a member unless `shares`. */
 export const memberConsent = z.strictObject({
@@ -32,9 +33,7 @@ export const guardianState = z.strictObject({
 export type GuardianState = z.infer<typeof guardianState>;
 
 /** Whom to ask. */
-export const guardianRequest = z.strictObject({
-  email: z.email("Write an e-mail address, like name@example.org.").max(254),
-});
+export const guardianRequest = z.strictObject({ email });
 
 /** The secret of a link from a mail. */
 export const linkRequest = z.strictObject({ token: z.string().min(1).max(200) });

@@ -1,4 +1,6 @@
 import { z } from "zod";
+import { email } from "../account";
+import { linkRequest } from "./consent";
 import { memberName, studioRole } from "./studio";
 
 const invitedRole = studioRole.exclude(["owner"]);
@@ -20,7 +22,7 @@ export type Invite = z.infer<typeof invite>;
 /** Whom to invite. Whoever has an open invitation already gets a new link in its place. */
 export const inviteRequest = z.strictObject({
   emails: z
-    .array(z.email("Write an e-mail address, like name@example.org.").max(254))
+    .array(email)
     .min(1, "Write at least one address.")
     .max(50, "Invite at most 50 at a time."),
   role: invitedRole.default("pupil"),
@@ -46,7 +48,7 @@ export type InviteLook = z.infer<typeof inviteLook>;
 
 /** Joining. One may join without agreeing and agree later; agreeing needs the birth year (409 "birth-year-needed"). */
 export const inviteAcceptance = z.strictObject({
-  token: z.string().min(1).max(200),
+  token: linkRequest.shape.token,
   name: memberName,
   agree: z.boolean(),
 });

@@ -3,6 +3,7 @@ import { ownInstrument } from "../instrument";
 import { pitchBand } from "../pitchBand";
 import { playerWishes } from "../playerWishes";
 import { tonicName } from "../song";
+import { lastTake } from "./assignment";
 import { memberConsent } from "./consent";
 import { studioRole } from "./studio";
 
@@ -45,8 +46,7 @@ export const rosterRow = z.strictObject({
     }),
   ),
   openCount: z.int(),
-  /** the newest take handed in */
-  lastTake: z.strictObject({ at: z.iso.datetime(), effort: z.int().min(1).max(5).nullable() }).nullable(),
+  lastTake,
   /** takes that wait for an answer */
   waiting: z.int(),
   /** such as "hard twice", "voice is changing: measure again" */

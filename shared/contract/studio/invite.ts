@@ -21,10 +21,7 @@ export type Invite = z.infer<typeof invite>;
 
 /** Whom to invite. Whoever has an open invitation already gets a new link in its place. */
 export const inviteRequest = z.strictObject({
-  emails: z
-    .array(email)
-    .min(1, "Write at least one address.")
-    .max(50, "Invite at most 50 at a time."),
+  emails: z.array(email).min(1, "Write at least one address.").max(50, "Invite at most 50 at a time."),
   role: invitedRole.default("pupil"),
   groupId: z.uuid().nullable().default(null),
 });

@@ -1,5 +1,6 @@
 import { axeFaults } from "./axeFaults";
-import { signInAsMaren } from "./signIn";
+import { openFerry } from "./openFerry";
+import { scrollsSideways } from "./screenFaults";
 import { setStage } from "./stage";
 
 const stage = setStage("kept");
@@ -11,10 +12,7 @@ test.each([
   "on the %s in %s colours three arrangements are proposed; one is heard, changed on the neck and by eighths, kept, and stands on the sheet",
   async (viewport, scheme) => {
     const { context, page, errors } = await stage.open("none", viewport, scheme);
-    await signInAsMaren(page, "/songs");
-    await page.getByText("The Half-Past-Nine Ferry").first().click();
-    await page.getByTestId("chart").waitFor();
-    const song = page.url().replace(/\?.*$/, "");
+    const song = await openFerry(page);
     await page.goto(`${song}/ways`);
     await page.getByTestId("arrange").click();
     const open = page.getByTestId(/^open-/);
@@ -52,9 +50,7 @@ test.each([
     await last.nth(1).click();
     expect(await last.nth(1).getAttribute("aria-checked")).toBe("true");
     expect(await axeFaults(page)).toEqual([]);
-    expect(await page.evaluate("document.documentElement.scrollWidth > document.documentElement.clientWidth")).toBe(
-      false,
-    );
+    expect(await scrollsSideways(page)).toBe(false);
 
     // What is not kept yet survives a reload; then it is kept under a name of its own.
     await page.reload();

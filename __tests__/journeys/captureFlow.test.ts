@@ -1,5 +1,6 @@
 import type { Page, Request } from "playwright-core";
 import { makeMicrophones } from "./microphone";
+import { typeCredentials } from "./signIn";
 import { setStage } from "./stage";
 import { singFor, sungUpTo } from "./singing";
 
@@ -88,9 +89,7 @@ test("a take is played back with its trail moving along, trimmed by keys and by 
 test("nothing of the sound leaves the page: while it is sung, heard, played, trimmed and kept", async () => {
   const { context, page } = await stage.open(song, "phone");
   await page.goto("/account/sign-up");
-  await page.getByTestId("email").fill("quiet.singer@example.org");
-  await page.getByTestId("password").fill("kettle rain window");
-  await page.getByTestId("send").click();
+  await typeCredentials(page, "quiet.singer@example.org", "kettle rain window");
   await page.waitForURL((url) => !url.pathname.endsWith("/sign-up"));
 
   const requests: Request[] = [];

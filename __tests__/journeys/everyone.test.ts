@@ -1,5 +1,6 @@
 import { axeFaults } from "./axeFaults";
-import { signInAsMaren } from "./signIn";
+import { openFerry } from "./openFerry";
+import { scrollsSideways } from "./screenFaults";
 import { setStage } from "./stage";
 
 const stage = setStage("kept");
@@ -11,10 +12,7 @@ test.each([
   "on the %s in %s colours players get their ways into one key, and a whistle moves the keys",
   async (viewport, scheme) => {
     const { context, page, errors } = await stage.open("none", viewport, scheme);
-    await signInAsMaren(page, "/songs");
-    await page.getByText("The Half-Past-Nine Ferry").first().click();
-    await page.getByTestId("chart").waitFor();
-    const song = page.url().replace(/\?.*$/, "");
+    const song = await openFerry(page);
     await page.goto(`${song}/everyone`);
     await page.getByTestId("player-name").fill("Ilse");
     await page.getByTestId("player-instrument").selectOption("guitar");
@@ -32,9 +30,7 @@ test.each([
     await page.getByTestId("player").nth(1).waitFor();
     await ways.nth(1).waitFor();
     expect(await ways.nth(1).getAttribute("aria-checked")).toBe("true");
-    expect(await page.evaluate("document.documentElement.scrollWidth > document.documentElement.clientWidth")).toBe(
-      false,
-    );
+    expect(await scrollsSideways(page)).toBe(false);
     await page.goto(`${song}/keys`);
     await page
       .getByTestId("fixed-line")

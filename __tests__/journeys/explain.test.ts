@@ -1,5 +1,6 @@
 import { axeFaults } from "./axeFaults";
-import { signInAsMaren } from "./signIn";
+import { openFerry } from "./openFerry";
+import { scrollsSideways } from "./screenFaults";
 import { setStage } from "./stage";
 
 const stage = setStage("kept");
@@ -11,10 +12,7 @@ test.each([
   "on the %s in %s colours a way is explained step by step, and a question is answered on the keys",
   async (viewport, scheme) => {
     const { context, page, errors } = await stage.open("none", viewport, scheme);
-    await signInAsMaren(page, "/songs");
-    await page.getByText("The Half-Past-Nine Ferry").first().click();
-    await page.getByTestId("chart").waitFor();
-    await page.goto(`${page.url().replace(/\?.*$/, "")}/ways`);
+    await page.goto(`${await openFerry(page)}/ways`);
     await page.getByTestId("way-to-why").click();
 
     await page.getByTestId("scales").waitFor();
@@ -29,9 +27,7 @@ test.each([
     await page.reload();
     await page.getByTestId("numbered-lines").waitFor();
     expect(await axeFaults(page)).toEqual([]);
-    expect(await page.evaluate("document.documentElement.scrollWidth > document.documentElement.clientWidth")).toBe(
-      false,
-    );
+    expect(await scrollsSideways(page)).toBe(false);
     expect(errors).toEqual([]);
     await context.close();
   },

@@ -1,6 +1,8 @@
 import { randomUUID } from "node:crypto";
 import type { Page } from "playwright-core";
 import { singTune, singWhenCounted, willSing } from "./countedSinger";
+import { shelfOf } from "./shelfOf";
+import { typeCredentials } from "./signIn";
 import { setStage } from "./stage";
 
 const stage = setStage("kept");
@@ -33,15 +35,13 @@ const song = {
 };
 const password = "kettle rain window";
 
-/** Signs up, and signs in at the page. */
-async function comeIn(page: Page, email: string, next: string, put?: (token: string) => Promise<void>): Promise<void> {
-  const made = await page.request.post("/api/auth/sign-up", { data: { email, password } });
-  await put?.(((await made.json()) as { accessToken: string }).accessToken);
+/** Signs up, and signs in at the page; the account's shelf. */
+async function comeIn(page: Page, email: string, next: string) {
+  const put = await shelfOf(page, email, password, "sign-up");
   await page.goto(`/account/sign-in?next=${encodeURIComponent(next)}`);
-  await page.getByTestId("email").fill(email);
-  await page.getByTestId("password").fill(password);
-  await page.getByTestId("send").click();
+  await typeCredentials(page, email, password);
   await page.waitForURL(`**${next}`);
+  return put;
 }
 
 test("a pupil sings what was given and hands it in over a connection that breaks; the teacher hears it, says something at a time, accepts it, and hears nothing once consent is withdrawn", async () => {
@@ -49,10 +49,8 @@ test("a pupil sings what was given and hands it in over a connection that breaks
   const [songId, studioId, pupilId, teacherId, assignmentId, partId] = Array.from({ length: 6 }, randomUUID);
   await singWhenCounted(pupil.page);
   await comeIn(teacher.page, "ruth.hand-in@example.org", "/songs");
-  await comeIn(pupil.page, "wil.hand-in@example.org", "/songs", async (token) => {
-    const data = { ...song, id: songId, createdAt: new Date().toISOString() };
-    await pupil.page.request.put(`/api/songs/${songId}`, { data, headers: { Authorization: `Bearer ${token}` } });
-  });
+  const put = await comeIn(pupil.page, "wil.hand-in@example.org", "/songs");
+  await put("songs", { ...song, id: songId!, createdAt: new Date().toISOString() });
   // The studio as invitation and assignment leave it; journeys of their own go that way.
   const given = JSON.stringify({ ...song, demo: undefined, tags: undefined }).replaceAll("'", "''");
   await stage.query(`

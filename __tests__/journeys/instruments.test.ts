@@ -1,5 +1,6 @@
 import { randomUUID } from "node:crypto";
 import { axeFaults } from "./axeFaults";
+import { typeCredentials } from "./signIn";
 import { setStage } from "./stage";
 
 const stage = setStage("kept");
@@ -65,9 +66,7 @@ test("an odd instrument is built on the phone, heard, offered for a song's ways,
 
   // Signing up takes it along.
   await page.goto(`/account/sign-up?next=${encodeURIComponent("/instruments")}`);
-  await page.getByTestId("email").fill(`${randomUUID()}@orlow-quay.example`);
-  await page.getByTestId("password").fill("slipway lantern");
-  await page.getByTestId("send").click();
+  await typeCredentials(page, `${randomUUID()}@orlow-quay.example`, "slipway lantern");
   await page.waitForURL("**/instruments");
   await list.getByText("Net-loft drone").first().waitFor();
 

@@ -1,6 +1,7 @@
 import type { Page } from "playwright-core";
 import { axeFaults } from "./axeFaults";
 import type { Viewport } from "./browser";
+import { scrollsSideways } from "./screenFaults";
 import { signInAsMaren } from "./signIn";
 import { setStage } from "./stage";
 
@@ -74,9 +75,7 @@ test.each(["phone", "wide"] as const)(
     await page.goto("/voice/guided");
     await page.getByTestId("guided-start").waitFor();
     await inBoth();
-    expect(await page.evaluate("document.documentElement.scrollWidth > document.documentElement.clientWidth")).toBe(
-      false,
-    );
+    expect(await scrollsSideways(page)).toBe(false);
     await context.close();
   },
   60_000,

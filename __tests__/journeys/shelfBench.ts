@@ -2,6 +2,7 @@
 import { randomUUID } from "node:crypto";
 import type { Page } from "playwright-core";
 import { launchBrowser, viewports, type Viewport } from "./browser";
+import { typeCredentials } from "./signIn";
 import { startProduct } from "./product";
 import { createRandom } from "../sound/random";
 
@@ -93,9 +94,7 @@ const first = '[data-testid="songs"] a[data-testid^="song-"]';
 async function measure(page: Page, viewport: Viewport): Promise<void> {
   page.setDefaultTimeout(60_000);
   await page.goto("/account/sign-in?next=%2Faccount");
-  await page.getByTestId("email").fill(email);
-  await page.getByTestId("password").fill(password);
-  await page.getByTestId("send").click();
+  await typeCredentials(page, email, password);
   await page.waitForURL("**/account");
   await page.waitForLoadState("networkidle");
 

@@ -2,6 +2,7 @@ import { randomUUID } from "node:crypto";
 import type { Page } from "playwright-core";
 import { axeFaults } from "./axeFaults";
 import { tokenFor } from "./mailbox";
+import { shelfOf } from "./shelfOf";
 import { signInAsRuth, typeCredentials } from "./signIn";
 import { setStage } from "./stage";
 
@@ -46,17 +47,6 @@ async function join(page: Page, link: string, who: { email: string; name: string
   await page.getByTestId("joined").waitFor();
 }
 
-/** Puts something onto the shelf of an account, as its own pages do. */
-async function putFor(page: Page, email: string, word: string, name: string, item: { id: string }): Promise<void> {
-  const signedIn = await page.request.post("/api/auth/sign-in", { data: { email, password: word } });
-  const { accessToken } = (await signedIn.json()) as { accessToken: string };
-  const answer = await page.request.put(`/api/${name}/${item.id}`, {
-    data: item,
-    headers: { Authorization: `Bearer ${accessToken}` },
-  });
-  expect([answer.status(), await answer.text()]).toEqual([201, expect.anything()]);
-}
-
 const aVoice = (lowMidi: number) => ({
   ...{ id: randomUUID(), name: "Mine", createdAt: new Date().toISOString() },
   byHand: {
@@ -72,7 +62,8 @@ test("a pupil joins from the mail and gets a song in their own key; without cons
   const studio = await openStudio(at.page);
   expect(await axeFaults(at.page)).toEqual([]);
   await join(home.page, await invite(at.page, studio, email), { email, name, year: "1988" });
-  await putFor(home.page, email, password, "voices", aVoice(50) as { id: string });
+  const put = await shelfOf(home.page, email, password, "sign-in");
+  await put("voices", aVoice(50));
 
   await at.page.goto(`${studio}/assign`);
   await at.page.getByTestId("assign-song").selectOption({ label: "Fog Bell" });
@@ -133,7 +124,8 @@ test("a guardian decides by the link from the mail, and until then and after tak
   await home.page.getByTestId("guardian-email").fill(parent);
   await home.page.getByTestId("ask-guardian").click();
   await home.page.getByTestId("guardian-asked").waitFor();
-  await putFor(home.page, email, password, "voices", aVoice(57) as { id: string });
+  const put = await shelfOf(home.page, email, password, "sign-in");
+  await put("voices", aVoice(57));
   const seen = async () => {
     await at.page.goto(`${studio}?q=${encodeURIComponent(name)}`);
     return at.page.getByTestId("pupil").filter({ hasText: name }).innerText();

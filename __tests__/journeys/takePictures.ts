@@ -5,7 +5,8 @@ import type { Page } from "playwright-core";
 import { launchBrowser, viewports, type Viewport } from "./browser";
 import { makeMicrophones } from "./microphone";
 import { startProduct } from "./product";
-import { signInAsMaren, signInAsRuth } from "./signIn";
+import { openFerry } from "./openFerry";
+import { signInAsRuth } from "./signIn";
 import { sungUpTo } from "./singing";
 
 const folder = join(__dirname, "..", "..", "docs", "pictures");
@@ -52,10 +53,7 @@ async function sung(page: Page): Promise<void> {
 
 /** A song, its keys and its ways, as Maren of the demonstration sees them. */
 async function classSongs(page: Page, viewport: Viewport): Promise<void> {
-  await signInAsMaren(page, "/songs");
-  await page.getByText("The Half-Past-Nine Ferry").click();
-  await page.getByTestId("chart").waitFor();
-  const song = page.url();
+  const song = await openFerry(page);
   await page.getByTestId(viewport === "wide" ? "ways" : "my-key").waitFor();
   await picture(page, `${viewport}-song`);
   await page.goto(`${song}/keys`);

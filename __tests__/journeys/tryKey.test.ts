@@ -1,6 +1,8 @@
 import { randomUUID } from "node:crypto";
 import type { Page } from "playwright-core";
 import { singTune, singWhenCounted, willSing } from "./countedSinger";
+import { shelfOf } from "./shelfOf";
+import { typeCredentials } from "./signIn";
 import { setStage } from "./stage";
 
 const stage = setStage("kept");
@@ -38,32 +40,22 @@ const sungIn = (shift: number) =>
 /** An account with a voice set by hand and one song with its tune; its page of keys. */
 async function makeSinger(page: Page, email: string): Promise<string> {
   const password = "kettle rain window";
-  const made = await page.request.post("/api/auth/sign-up", { data: { email, password } });
-  const { accessToken } = (await made.json()) as { accessToken: string };
-  const put = async (name: string, item: { id: string }) => {
-    const answer = await page.request.put(`/api/${name}/${item.id}`, {
-      data: item,
-      headers: { Authorization: `Bearer ${accessToken}` },
-    });
-    expect([answer.status(), await answer.text()]).toEqual([201, expect.anything()]);
-  };
+  const put = await shelfOf(page, email, password, "sign-up");
   const createdAt = new Date().toISOString();
   await put("voices", {
     id: randomUUID(),
     name: "Wil",
     byHand: { range: { lowMidi: 55, highMidi: 76 }, comfort: { lowMidi: 58, highMidi: 74 } },
     createdAt,
-  } as { id: string });
+  });
   const song = randomUUID();
   await put("songs", {
     ...{ id: song, title: "Back to Me", chart, writtenKey: { tonic: "C", mode: "major" } },
     ...{ tune: { kind: "melody", home: "C", notes }, beatsPerBar: 4, tempo, demo: null, tags: [] },
     ...{ archivedAt: null, playedAt: null, createdAt, revision: 0 },
-  } as { id: string });
+  });
   await page.goto(`/account/sign-in?next=${encodeURIComponent(`/songs/${song}/keys`)}`);
-  await page.getByTestId("email").fill(email);
-  await page.getByTestId("password").fill(password);
-  await page.getByTestId("send").click();
+  await typeCredentials(page, email, password);
   await page.waitForURL(`**/songs/${song}/keys`);
   return `/songs/${song}`;
 }

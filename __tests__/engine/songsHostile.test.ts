@@ -5,14 +5,23 @@ import { demoSongs } from "../../shared/songs/demoSongs";
 import { type MelodyFile, readMelodyFile } from "../../shared/songs/melodyFile";
 import { hostile, oneNote, score } from "./hostileFiles";
 
-/** Processor time that a refusal may take. */
+/** Processor time that a file may take. */
 const patienceMs = 1000;
 
+/** What is read of a file, in time; the better of two goes counts, as whatever else the machine does slows one. */
+function readInTime(name: string, bytes: Uint8Array): MelodyFile {
+  const go = () => {
+    const begun = process.cpuUsage();
+    const read = readMelodyFile(name, bytes);
+    return { read, ms: process.cpuUsage(begun).user / 1000 };
+  };
+  const first = go();
+  expect(first.ms < patienceMs ? first.ms : go().ms).toBeLessThan(patienceMs);
+  return first.read;
+}
+
 test.each(hostile)("%s ends in a clear refusal, quickly", (_, name, make, reason) => {
-  const bytes = make();
-  const begun = process.cpuUsage();
-  const read = readMelodyFile(name, bytes);
-  expect(process.cpuUsage(begun).user / 1000).toBeLessThan(patienceMs);
+  const read = readInTime(name, make());
   expect(read).toEqual({ ok: false, reason: expect.stringMatching(reason) as string });
 });
 
@@ -27,10 +36,7 @@ const harmless: [string, () => string][] = [
   ["thirty thousand voices", () => `X:1\nK:C\nC|\n${Array.from({ length: 30_000 }, (_, k) => `V:${k}\n`).join("")}`],
 ];
 test.each(harmless)("%s harm nobody: what can be read is read, quickly", (_, make) => {
-  const bytes = strToU8(make());
-  const begun = process.cpuUsage();
-  const read = readMelodyFile("a.abc", bytes);
-  expect(process.cpuUsage(begun).user / 1000).toBeLessThan(patienceMs);
+  const read = readInTime("a.abc", strToU8(make()));
   expect(read.ok && read.voices[read.proposed]?.melody.notes.length).toBeGreaterThan(0);
   sane(read);
 });

@@ -28,7 +28,7 @@ export interface MidiTracks {
 type Refusal = { ok: false; reason: string };
 
 const most = {
-  bytes: 2_000_000,
+  bytes: 1_200_000,
   notes: 100_000,
   atOnce: 256,
   strays: 2_000,

@@ -30,7 +30,8 @@ export function readMusicXml(source: string): WrittenFile {
   if ((source.match(/<measure[\s/>]/g)?.length ?? 0) > 20 * mostMeasures)
     return { ok: false, reason: "This score is far larger than a song." };
   const score = parseXml(source);
-  if (!score) return { ok: false, reason: "This MusicXML file cannot be read; it is malformed." };
+  if (!score)
+    return { ok: false, reason: "This MusicXML file cannot be read; it is malformed, or far larger than a song." };
   if (score.name !== "score-partwise" && score.name !== "score-timewise") {
     return { ok: false, reason: "This XML file is no MusicXML score." };
   }

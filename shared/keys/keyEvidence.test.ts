@@ -147,6 +147,21 @@ describe("the comfort band", () => {
     expect(keyEvidence(voice, [{ effort: 5, measures: null }])).toEqual([]);
   });
 
+  test("in a very narrow band the two ends meet and do not pass each other, whichever side was hard first", () => {
+    const narrow = { range: { lowMidi: 36, highMidi: 83.1875 }, comfort: { lowMidi: 82.8125, highMidi: 83.1875 } };
+    expect(narrowedComfort(narrow.comfort, keyEvidence(narrow, [aTry(4, [missedAbove(83)])]))).toEqual({
+      lowMidi: 83,
+      highMidi: 83.1875,
+    });
+    const first = { midi: 63, effort: 5 };
+    const met = narrowedComfort({ lowMidi: 59.5, highMidi: 64.8 }, [first]);
+    const both = narrowedComfort({ lowMidi: 59.5, highMidi: 64.8 }, [first, { midi: 62, effort: 5 }]);
+    expect([met, both]).toEqual([
+      { lowMidi: 59.5, highMidi: 62 },
+      { lowMidi: 62, highMidi: 62 },
+    ]);
+  });
+
   test("never crosses itself", () => {
     const both = [
       { midi: 55, effort: 5 },

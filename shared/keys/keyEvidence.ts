@@ -90,7 +90,7 @@ export function triedVoice(voice: SingingVoice, tries: readonly SungTry[]): Trie
  * @param band fractional MIDI numbers
  * @param evidence pitches with how they felt; those below 4 change nothing
  * @param judged the band whose middle tells high pitches from low ones; default the band itself
- * @returns the band, never wider; with both halves hard one semitone in the middle is left
+ * @returns the band, never wider; with both halves hard one note in the middle is left
  * @example narrowedComfort({ lowMidi: 50, highMidi: 62 }, [{ midi: 61, effort: 4 }]) // => { lowMidi: 50, highMidi: 60 }
  */
 export function narrowedComfort(
@@ -100,11 +100,11 @@ export function narrowedComfort(
 ): PitchBand {
   const middle = (judged.lowMidi + judged.highMidi) / 2;
   const hard = evidence.filter(({ effort }) => effort >= hardFrom).map(({ midi }) => nearestSemitone(midi));
-  const tops = hard.filter((midi) => midi > middle).map((midi) => Math.max(midi - 1, Math.floor(middle)));
-  const bottoms = hard.filter((midi) => midi <= middle).map((midi) => Math.min(midi + 1, Math.ceil(middle)));
-  const highMidi = Math.min(band.highMidi, ...tops);
-  const lowMidi = Math.max(band.lowMidi, ...bottoms);
-  return { lowMidi, highMidi: Math.max(highMidi, lowMidi) };
+  // Where both halves meet: neither end passes it, so that more evidence only ever narrows the band.
+  const meeting = Math.max(band.lowMidi, Math.floor(middle));
+  const tops = hard.filter((midi) => midi > middle).map((midi) => Math.max(midi - 1, meeting));
+  const bottoms = hard.filter((midi) => midi <= middle).map((midi) => Math.min(midi + 1, meeting));
+  return { lowMidi: Math.max(band.lowMidi, ...bottoms), highMidi: Math.min(band.highMidi, ...tops) };
 }
 
 function hardReasons(voice: SingingVoice, { effort, measures, span }: SungTry): Reason[] {

@@ -1,5 +1,6 @@
 import { partMaxima, roomEnough } from "@/shared/keys/keyParts";
 import type { KeyParts } from "@/shared/keys/keyScore";
+import { semitoneWords } from "@/shared/music/moveWords";
 
 /** The five parts of a score by their names, in their order. */
 export const partNames: readonly { part: keyof KeyParts; name: string; inWords: string }[] = [
@@ -38,7 +39,6 @@ export function roomWords({ above, below }: Rooms): string {
 }
 
 function roomTo(semitones: number): string {
-  const size = Math.abs(semitones);
-  const amount = `${size} ${size === 1 ? "semitone" : "semitones"}`;
+  const amount = semitoneWords(Math.abs(semitones));
   return semitones < 0 ? `${amount} past` : `${amount} to`;
 }

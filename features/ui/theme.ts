@@ -70,18 +70,27 @@ export const sizes = {
   wideFrom: 1024,
 } as const;
 
+/** The custom properties that a scheme sets for itself. */
+function ownOf(scheme: Scheme): Record<string, string> {
+  const [band, white, black] =
+    scheme === "morning"
+      ? ["rgba(31,122,116,.13)", "card", "ink"]
+      : (["rgba(99,207,196,.13)", "line", "paper"] as const);
+  return {
+    ...Object.fromEntries(names.map((name) => [`--${name}`, tokens[scheme][name]])),
+    ...{ "--band": band, "--whiteKey": `var(--${white})`, "--blackKey": `var(--${black})` },
+  };
+}
+
 function properties(scheme: Scheme): string {
-  const plain = names.map((name) => `--${name}:${tokens[scheme][name]}`).join(";");
-  const band = scheme === "morning" ? "rgba(31,122,116,.13)" : "rgba(99,207,196,.13)";
-  const keys = scheme === "morning" ? ["card", "ink"] : ["line", "paper"];
-  return `${plain};--band:${band};--whiteKey:var(--${keys[0]});--blackKey:var(--${keys[1]});color-scheme:${scheme === "morning" ? "light" : "dark"}`;
+  const rules = Object.entries(ownOf(scheme)).map(([name, value]) => `${name}:${value}`);
+  return `${rules.join(";")};color-scheme:${scheme === "morning" ? "light" : "dark"}`;
 }
 
 /** The colours of one scheme for a part of a page, such as the stage, which is dark at any hour. */
 export function schemeStyle(scheme: Scheme): Record<string, string> {
-  const plain = Object.fromEntries(names.map((name) => [`--${name}`, tokens[scheme][name]]));
   const mixed = derived.split(";").map((rule) => rule.trim().split(/:(.*)/s, 2) as [string, string]);
-  return { ...plain, ...Object.fromEntries(mixed), colorScheme: scheme === "morning" ? "light" : "dark" };
+  return { ...ownOf(scheme), ...Object.fromEntries(mixed), colorScheme: scheme === "morning" ? "light" : "dark" };
 }
 
 const derived = `--soft:color-mix(in srgb,var(--plum) 8%,var(--card));

@@ -3,8 +3,9 @@ import { SpanLadder } from "@/features/span/SpanLadder";
 import type { LadderLabel } from "@/features/span/LadderLabels";
 import type { SingingVoice } from "@/shared/keys/keyScore";
 import type { PitchBand } from "@/shared/voice/takeReport";
-import { bandWords, noteWord, semitonesOf, semitoneWords } from "./noteWords";
+import { bandWords, noteWord, semitonesOf } from "./noteWords";
 import { longestNote, marksOfTimes, type NoteTime } from "./timeOnNotes";
+import { semitoneWords } from "@/shared/music/moveWords";
 
 export interface VoiceLadderProps {
   voice: SingingVoice;

@@ -15,11 +15,6 @@ export function semitonesOf({ lowMidi, highMidi }: PitchBand): number {
   return Math.round(highMidi) - Math.round(lowMidi);
 }
 
-/** "1 semitone", "14 semitones". */
-export function semitoneWords(count: number): string {
-  return `${count} ${count === 1 ? "semitone" : "semitones"}`;
-}
-
 /** How sure a number is, in words. */
 export function certaintyWords(certainty: number): string {
   if (certainty >= 0.8) return "Sure";

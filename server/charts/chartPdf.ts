@@ -2,6 +2,7 @@ import type { ChartPdfRequest } from "../../shared/contract/chartPdf";
 import { keyWords } from "../../shared/music/keyWords";
 import { glyphs } from "../../shared/music/pitch";
 import { type ChartRow, chartRows, signLine } from "../../shared/sheets/chartRows";
+import { paperTones } from "../../shared/sheets/paperTones";
 import { rowPages } from "../../shared/sheets/rowPages";
 import type { SheetFace } from "../../shared/sheets/sheetPiece";
 import { cellWidth, textPiece, wrapText } from "../../shared/sheets/textPiece";
@@ -13,9 +14,7 @@ const paperPt = { A4: [595.28, 841.89], Letter: [612, 792] } as const;
 const marginPt = 54;
 const size = 11;
 const titleSize = 22;
-const ink = "#241C33";
-const soft = "#5D5370";
-const plum = "#6A2C70";
+const { ink, soft, plum } = paperTones;
 
 const heights: Record<ChartRow["kind"], number> = {
   heading: 22,

@@ -1,23 +1,12 @@
 import type { SheetPdfRequest } from "../../shared/contract/sheetPdf";
+import { paperTones } from "../../shared/sheets/paperTones";
 import { sheetPages } from "../../shared/sheets/sheetPages";
-import type { SheetPiece, SheetTone } from "../../shared/sheets/sheetPiece";
+import type { SheetPiece } from "../../shared/sheets/sheetPiece";
 import { pdfBytes, refuseBook } from "./pdfBytes";
 import { PrintedText } from "./printedText";
 
 /** The layout counts 96 to the inch, a PDF 72. */
 const scale = 0.75;
-
-const colors: Record<SheetTone, string> = {
-  ink: "#241C33",
-  soft: "#5D5370",
-  line: "#E3DACB",
-  plum: "#6A2C70",
-  lagoon: "#1F7A74",
-  comfort: "#E1EFEE",
-  reach: "#B9770E",
-  paper: "#FFFFFF",
-  onPlum: "#FFFFFF",
-};
 
 /** Draws the pages of a sheet, as the screen shows them. Refuses one that would fill a book. */
 export async function sheetPdf({ sheet, options }: SheetPdfRequest): Promise<Buffer> {
@@ -40,7 +29,7 @@ function draw(text: PrintedText, piece: SheetPiece): void {
   const { document } = text;
   switch (piece.kind) {
     case "text":
-      text.draw(piece, colors[piece.tone]);
+      text.draw(piece, paperTones[piece.tone]);
       break;
     case "picture":
       for (const part of piece.pieces) draw(text, part);
@@ -51,14 +40,14 @@ function draw(text: PrintedText, piece: SheetPiece): void {
         .lineCap("round")
         .moveTo(piece.x1, piece.y1)
         .lineTo(piece.x2, piece.y2)
-        .stroke(colors[piece.tone]);
+        .stroke(paperTones[piece.tone]);
       break;
     case "box":
-      document.roundedRect(piece.x, piece.y, piece.width, piece.height, piece.radius).fill(colors[piece.tone]);
+      document.roundedRect(piece.x, piece.y, piece.width, piece.height, piece.radius).fill(paperTones[piece.tone]);
       break;
     case "dot":
       document.circle(piece.x, piece.y, piece.radius);
-      if (piece.stroke === null) document.fill(colors[piece.tone]);
-      else document.lineWidth(piece.stroke).stroke(colors[piece.tone]);
+      if (piece.stroke === null) document.fill(paperTones[piece.tone]);
+      else document.lineWidth(piece.stroke).stroke(paperTones[piece.tone]);
   }
 }

@@ -1,5 +1,6 @@
 import { glyphs, noteName } from "../music/pitch";
 import type { PhraseMeasures, Shortfall, TakeMeasures } from "./takeMeasures";
+import { semitoneWords } from "../music/moveWords";
 
 /** From these figures on something is worth saying. */
 const offFrom = 35;
@@ -38,9 +39,7 @@ export function takeSummary(take: Omit<TakeMeasures, "summary">): string[] {
   const sentences: string[] = [];
   if (moved > 0) {
     const where = take.moved > 0 ? "above" : "below";
-    sentences.push(
-      `You sang ${moved} ${moved === 1 ? "semitone" : "semitones"} ${where} this key; it is judged as you sang it.`,
-    );
+    sentences.push(`You sang ${semitoneWords(moved)} ${where} this key; it is judged as you sang it.`);
   }
   if (take.offCents !== null) {
     const share = Math.round(100 * (take.inTune ?? 0));

@@ -2,6 +2,7 @@ import { glyphs, noteName, type Spelling } from "../music/pitch";
 import { COARSE_WORDS } from "./keyReason";
 import type { SharedSinger } from "./sharedSinger";
 import { listWords } from "../music/listWords";
+import { semitoneWords } from "../music/moveWords";
 
 /**
  * Who has a key hardest, and by how much.
@@ -42,10 +43,9 @@ function sides(
   spelling: Spelling,
 ): string {
   const note = (midi: number) => glyphs(noteName(midi, spelling));
-  const steps = (count: number) => `${count} ${count === 1 ? "semitone" : "semitones"}`;
   const parts = [
-    ...(past.above > 0 ? [`${note(key.highMidi)} lies ${steps(past.above)} over the ${limit}`] : []),
-    ...(past.below > 0 ? [`${note(key.lowMidi)} lies ${steps(past.below)} under it`] : []),
+    ...(past.above > 0 ? [`${note(key.highMidi)} lies ${semitoneWords(past.above)} over the ${limit}`] : []),
+    ...(past.below > 0 ? [`${note(key.lowMidi)} lies ${semitoneWords(past.below)} under it`] : []),
   ];
   return past.above > 0 ? parts.join(", ") : parts.join("").replace("under it", `under the ${limit}`);
 }

@@ -32,6 +32,17 @@ export function distanceWords(semitones: number): string {
 }
 
 /**
+ * A number of semitones, as a number.
+ *
+ * @param count how many
+ * @returns such as "1 semitone" or "14 semitones"
+ * @example semitoneWords(1) // => "1 semitone"
+ */
+export function semitoneWords(count: number): string {
+  return `${count} ${count === 1 ? "semitone" : "semitones"}`;
+}
+
+/**
  * Where a key lies from the one the chart is written in, as a phrase.
  *
  * @param semitones whole semitones from the written key; negative = lower

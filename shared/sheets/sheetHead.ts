@@ -3,6 +3,7 @@ import { glyphs } from "../music/pitch";
 import type { Sheet, SheetOptions } from "./sheet";
 import type { SheetPiece } from "./sheetPiece";
 import { textPiece, textWidth, wrapText } from "./textPiece";
+import { semitoneWords } from "../music/moveWords";
 
 /** What to do before the first chord, as it stands under the title. */
 export interface SheetFact {
@@ -32,7 +33,7 @@ export function sheetFacts({ instrument, key, firstNote }: Sheet, shows: SheetOp
       heading: capo > 0 ? `Capo ${capo}` : "No capo",
       words: moved ? play : `Played and heard in ${heard}.`,
     });
-    const far = `${Math.abs(retune)} ${Math.abs(retune) === 1 ? "semitone" : "semitones"} ${retune < 0 ? "down" : "up"}`;
+    const far = `${semitoneWords(Math.abs(retune))} ${retune < 0 ? "down" : "up"}`;
     facts.push({
       heading: stringNames(tuned),
       words: retune === 0 ? `${instrument.name}, as tuned` : `all strings ${far} from ${stringNames(strings)}`,

@@ -2,6 +2,7 @@ import type { KeyScore, SingingVoice } from "../keys/keyScore";
 import { keyFifths, type KeyName } from "../music/keyName";
 import { glyphs, noteName } from "../music/pitch";
 import type { SheetTune } from "./sheet";
+import { semitoneWords } from "../music/moveWords";
 
 /**
  * Where the tune lies in the voice, for the sheet.
@@ -25,7 +26,7 @@ export function sheetTune(
   const spelling = keyFifths(key) < 0 ? "flats" : "sharps";
   const name = (midi: number) => glyphs(noteName(Math.round(midi), spelling));
   const room = Math.round(reserves.upper);
-  const above = room < 1 ? "" : ` ${room} ${room === 1 ? "semitone" : "semitones"} of room above.`;
+  const above = room < 1 ? "" : ` ${semitoneWords(room)} of room above.`;
   return {
     range: { lowMidi: range.lowMidi, highMidi: range.highMidi },
     comfort: { lowMidi: comfort.lowMidi, highMidi: comfort.highMidi },

@@ -1,5 +1,6 @@
 import type { TensionChange, TensionTotal } from "@/shared/instruments/tension";
 import { newtonWords, tensionWords, type Units } from "@/shared/instruments/units";
+import { semitoneWords } from "@/shared/music/moveWords";
 
 /** Semitones of each string, in playing order. */
 export type Shifts = number[];
@@ -10,8 +11,7 @@ export const highestShift = 5;
 /** "2 semitones down", "as it is". */
 export function shiftWords(semitones: number): string {
   if (semitones === 0) return "as it is";
-  const size = Math.abs(semitones);
-  return `${size} ${size === 1 ? "semitone" : "semitones"} ${semitones < 0 ? "down" : "up"}`;
+  return `${semitoneWords(Math.abs(semitones))} ${semitones < 0 ? "down" : "up"}`;
 }
 
 /** A tension in full: "10.3 kg, 101 N" or "22.8 lb". */

@@ -7,7 +7,8 @@ import type { SharedKey } from "@/shared/keys/sharedKey";
 import type { SharedSinger } from "@/shared/keys/sharedSinger";
 import type { Fit, GroupKey, GroupPart } from "./groupKey";
 import { listWords } from "@/shared/music/listWords";
-import { leadShift, octaveOff, semitoneWords } from "./groupWords";
+import { leadShift, octaveOff } from "./groupWords";
+import { semitoneWords } from "@/shared/music/moveWords";
 
 /** A singer that can be judged. */
 export interface JudgedSinger {

@@ -6,10 +6,6 @@ import { glyphs, noteName } from "@/shared/music/pitch";
 import { writtenKeyOf } from "../songKeys";
 import type { GroupKey, GroupPart } from "./groupKey";
 
-export function semitoneWords(count: number): string {
-  return `${count} ${count === 1 ? "semitone" : "semitones"}`;
-}
-
 /** The octave that the others are told from: of the moves in use the one with nobody far off, then the one nearest to the chart. */
 export function leadShift(shifts: readonly number[]): number {
   const furthest = (from: number) => Math.max(...shifts.map((shift) => Math.abs(shift - from)));

@@ -1,7 +1,7 @@
 import { memo, type CSSProperties } from "react";
+import { paperTones } from "@/shared/sheets/paperTones";
 import type { SheetPage } from "@/shared/sheets/sheetPages";
 import { Piece } from "./Piece";
-import { onPaper } from "./onPaper";
 
 export interface PaperPageProps {
   page: SheetPage;
@@ -17,10 +17,10 @@ export const PaperPage = memo(function PaperPage({ page, style }: PaperPageProps
       aria-label={`Page ${number} of ${of}`}
       data-testid="paper-page"
       viewBox={`0 0 ${width} ${height}`}
-      style={{ display: "block", width: "100%", background: onPaper.paper, ...style }}
+      style={{ display: "block", width: "100%", background: paperTones.paper, ...style }}
     >
       {pieces.map((piece, index) => (
-        <Piece key={index} piece={piece} colors={onPaper} />
+        <Piece key={index} piece={piece} colors={paperTones} />
       ))}
     </svg>
   );

@@ -10,7 +10,7 @@ const faces: Record<SheetFace, { family: string; weight: number }> = {
 };
 
 /** One piece of a sheet, drawn where it was laid. */
-export function Piece({ piece, colors }: { piece: SheetPiece; colors: Record<SheetTone, string> }) {
+export function Piece({ piece, colors }: { piece: SheetPiece; colors: Readonly<Record<SheetTone, string>> }) {
   switch (piece.kind) {
     case "text":
       return <Words piece={piece} color={colors[piece.tone]} />;

@@ -7,11 +7,12 @@ import { colors } from "@/features/ui/theme";
 import { useLayout } from "@/features/ui/useLayout";
 import { AfterSinging } from "../sing/AfterSinging";
 import { causeWords } from "../sing/failureWords";
-import { bandWords, noteWord, semitonesOf, semitoneWords } from "../noteWords";
+import { bandWords, noteWord, semitonesOf } from "../noteWords";
 import { timeOnNotes } from "../timeOnNotes";
 import { VoiceLadder } from "../VoiceLadder";
 import { shownEnds, type GuidedFindings, type GuidedState } from "./guidedSteps";
 import { takeOfHolds } from "./takeOfHolds";
+import { semitoneWords } from "@/shared/music/moveWords";
 
 export interface GuidedResultProps {
   state: GuidedState & { step: "done" };

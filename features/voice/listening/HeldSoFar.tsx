@@ -2,10 +2,11 @@ import { View } from "react-native";
 import { SpanLadder } from "@/features/span/SpanLadder";
 import { Heading } from "@/features/ui/Heading";
 import { Text } from "@/features/ui/Text";
-import { bandWords, noteWord, semitonesOf, semitoneWords } from "../noteWords";
+import { bandWords, noteWord, semitonesOf } from "../noteWords";
 import type { LiveSound } from "../recorder/liveSound";
 import { longestNote, marksOfTimes } from "../timeOnNotes";
 import { useHeard } from "./useHeard";
+import { semitoneWords } from "@/shared/music/moveWords";
 
 export interface HeldSoFarProps {
   live: LiveSound;

@@ -2,8 +2,8 @@ import { Notice } from "@/features/ui/Notice";
 import { Text } from "@/features/ui/Text";
 import type { Take } from "@/shared/contract/take";
 import { movingEnds, type MovedEnd } from "@/shared/voice/movingEnds";
-import { semitoneWords } from "../noteWords";
 import { shownTake } from "@/shared/voice/shownTake";
+import { semitoneWords } from "@/shared/music/moveWords";
 
 export interface MovingVoiceProps {
   /** of one voice */

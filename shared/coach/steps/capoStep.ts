@@ -11,6 +11,7 @@ import { soundAt } from "../../instruments/soundAt";
 import { retuned, stringLetters } from "../tunedNeck";
 import type { LeftOut, NeckDot, WhyStep } from "../whyStep";
 import { listWords } from "../../music/listWords";
+import { semitoneWords } from "../../music/moveWords";
 
 /** What a capo step speaks of. */
 interface CapoFacts {
@@ -82,9 +83,9 @@ function withCapo({ to, instrument, way }: CapoFacts, tuned: Instrument, bare: K
   const moves = before.map((name, k) => `${name} to ${after[k]}`);
   const shapes = sign({ tonic: way.shapeKey, mode: to.mode });
   return [
-    `The capo is a new nut. At fret ${fretName(instrument, way.capo)} every string sounds ${count(up, "semitone")} higher, one for each semitone of the neck: ${listWords(moves)}.`,
+    `The capo is a new nut. At fret ${fretName(instrument, way.capo)} every string sounds ${semitoneWords(up)} higher, one for each semitone of the neck: ${listWords(moves)}.`,
     way.retune === 0
-      ? `So ${shapes} shapes sound in ${sign(to)}: ${shapes} and ${count(up, "semitone")}.`
+      ? `So ${shapes} shapes sound in ${sign(to)}: ${shapes} and ${semitoneWords(up)}.`
       : `The strings were moved by ${signed(way.retune)} first, so ${shapes} shapes sound in ${sign(bare)}, and with the capo's ${signed(up)} in ${sign(to)}.`,
     "A capo shortens the strings, and a shorter string sounds higher. So it can only raise. To come down, let the strings down or play other shapes.",
     `${instrument.frets - way.capo} of ${instrument.frets} frets are left.`,
@@ -97,7 +98,7 @@ function withoutCapo({ from, to, instrument, way }: CapoFacts): string[] {
   if (needed === 0) return [only, "This way needs none."];
   const down = 12 - needed;
   const fret = usefulFrets(instrument).find((each) => semitonesAt(instrument, each) === needed);
-  const lower = `${glyphs(keyWords(to))} lies ${count(needed, "semitone")} over ${glyphs(keyWords(from))}, or ${count(down, "semitone")} under it.`;
+  const lower = `${glyphs(keyWords(to))} lies ${semitoneWords(needed)} over ${glyphs(keyWords(from))}, or ${semitoneWords(down)} under it.`;
   const instead =
     way.retune < 0
       ? "This way comes down by letting the strings down instead."
@@ -120,7 +121,7 @@ function checkFret(fret: number, asked: number, bare: KeyName, target: KeyName, 
   if (fret === asked)
     return {
       right: true,
-      words: `Fret ${name} raises by ${count(up, "semitone")}, from ${sign(bare)} to ${sign(target)}.`,
+      words: `Fret ${name} raises by ${semitoneWords(up)}, from ${sign(bare)} to ${sign(target)}.`,
     };
   if (fret === 0)
     return {
@@ -130,7 +131,7 @@ function checkFret(fret: number, asked: number, bare: KeyName, target: KeyName, 
   const off = wanted - up;
   return {
     right: false,
-    words: `At fret ${name} they would sound in ${sign(movedKey(bare, up))}. ${sign(target)} lies ${count(Math.abs(off), "semitone")} ${off > 0 ? "higher" : "lower"}.`,
+    words: `At fret ${name} they would sound in ${sign(movedKey(bare, up))}. ${sign(target)} lies ${semitoneWords(Math.abs(off))} ${off > 0 ? "higher" : "lower"}.`,
   };
 }
 
@@ -161,8 +162,4 @@ function sign(key: KeyName): string {
 
 function signed(semitones: number): string {
   return `${semitones < 0 ? "−" : "+"}${Math.abs(semitones)}`;
-}
-
-function count(number: number, noun: string): string {
-  return `${number} ${noun}${number === 1 ? "" : "s"}`;
 }

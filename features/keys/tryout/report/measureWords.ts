@@ -1,5 +1,6 @@
 import type { Measures, TakeMeasures } from "@/shared/keys/takeMeasures";
 import { glyphs, noteName } from "@/shared/music/pitch";
+import { semitoneWords } from "@/shared/music/moveWords";
 
 /** One measured thing in words and a number. */
 export interface MeasureWord {
@@ -75,5 +76,5 @@ export function measureWords(measures: Measures, spelling: "sharps" | "flats"): 
 function steps(semitones: number): string {
   const rounded = Math.round(10 * Math.abs(semitones)) / 10;
   const shown = rounded >= 1 && Math.abs(rounded - Math.round(rounded)) < 0.15 ? Math.round(rounded) : rounded;
-  return `${shown} ${shown === 1 ? "semitone" : "semitones"}`;
+  return semitoneWords(shown);
 }

@@ -87,6 +87,7 @@ export function aPart(change: Partial<Part> = {}): Part {
     note: "",
     partNote: "",
     lastTake: null,
+    takesHandedIn: [],
     recordingsKeptDays: 90,
     ...change,
   };

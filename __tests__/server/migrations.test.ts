@@ -27,6 +27,7 @@ const names = [
   "MembersGone1796300000000",
   "ConsentKept1796310000000",
   "TakesGone1796400000000",
+  "TakeOfHandIn1796500000000",
 ];
 const applied = () => database.query("SELECT name FROM migrations ORDER BY id");
 const tables = async (where = database) => {

@@ -68,6 +68,7 @@ export function aWav(bytes = 2044): Buffer {
 export function aHandIn(bytes: number, changes: Partial<HandInRequest> = {}): HandInRequest {
   return {
     id: randomUUID(),
+    takeId: randomUUID(),
     kind: "pupil-take",
     bytes,
     durationS: 12.5,

@@ -27,6 +27,7 @@ import { ConsentKept1796310000000 } from "./migrations/ConsentKept1796310000000"
 import { FirstTables1764547200000 } from "./migrations/FirstTables1764547200000";
 import { HandIns1796200000000 } from "./migrations/HandIns1796200000000";
 import { MembersGone1796300000000 } from "./migrations/MembersGone1796300000000";
+import { TakeOfHandIn1796500000000 } from "./migrations/TakeOfHandIn1796500000000";
 import { TakesGone1796400000000 } from "./migrations/TakesGone1796400000000";
 import { InstrumentPhotos1778000000000 } from "./migrations/InstrumentPhotos1778000000000";
 import { KeysPerVoice1775001600000 } from "./migrations/KeysPerVoice1775001600000";
@@ -117,6 +118,7 @@ export function createMigrationSource(url: string): DataSource {
       MembersGone1796300000000,
       ConsentKept1796310000000,
       TakesGone1796400000000,
+      TakeOfHandIn1796500000000,
     ],
     migrationsTransactionMode: "all",
   });

@@ -45,9 +45,23 @@ it("hands in under a new id each time, so that one taken back can be handed in a
   fireEvent.click(await screen.findByTestId("hand-in-now"));
   await waitFor(() => expect(mockHandIn).toHaveBeenCalledTimes(2));
   const sent = mockHandIn.mock.calls.map(([given]) => given);
-  expect(sent.map(({ takeId }) => takeId)).toEqual(["take", "take"]);
+  expect(sent.map(({ request }) => request.takeId)).toEqual(["take", "take"]);
   expect(new Set([...sent.map(({ id }) => id), "take"]).size).toBe(3);
   expect(sent.map(({ request }) => request.id)).toEqual(sent.map(({ id }) => id));
+});
+
+it("says after a reload that this take is handed in, and offers it again only once it is taken back", async () => {
+  server.to(`GET /parts/${part.id}`, { ...part, takesHandedIn: ["another", "take"] });
+  const { unmount } = open();
+  expect((await screen.findByTestId("handed-in")).textContent).toContain("has this take");
+  expect(screen.getByText("Open the thread")).toBeTruthy();
+  expect(screen.queryByTestId("hand-in-now")).toBeNull();
+  unmount();
+  queryClient.clear();
+  server.to(`GET /parts/${part.id}`, { ...part, takesHandedIn: ["another"] });
+  open();
+  expect(await screen.findByTestId("hand-in-now")).toBeTruthy();
+  expect(screen.queryByTestId("handed-in")).toBeNull();
 });
 
 it("says that it could not be looked up whether the song was given, and looks again", async () => {

@@ -11,14 +11,14 @@ import { Text } from "@/features/ui/Text";
 import { TextLink } from "@/features/ui/TextLink";
 import type { HandInRequest, TakePicture } from "@/shared/contract/studio/handIn";
 import { glyphs } from "@/shared/music/pitch";
+import { partPath } from "../partWords";
 import { studioQueries } from "../studioQueries";
 import { SendingRow } from "./SendingRow";
 import { takeSender } from "./takeSender";
 import { useSendings } from "./useSendings";
 
 /** A take that was sung and measured; its sound is made when it is handed in. */
-interface TakeToHandIn
-  extends Pick<HandInRequest, "id" | "effort" | "measures">, Pick<TakePicture, "trail" | "tune"> {
+interface TakeToHandIn extends Pick<HandInRequest, "id" | "effort" | "measures">, Pick<TakePicture, "trail" | "tune"> {
   tonic: string;
   shift: number;
 }
@@ -46,9 +46,9 @@ export function HandInTake({ songId, take, sound }: HandInTakeProps) {
       const { durationS, waveform } = made;
       const id = newId();
       await takeSender.handIn({
-        ...{ id, takeId: take.id, accountId: account.id, partId: listed.id, title: listed.title, sound: made.sound },
+        ...{ id, accountId: account.id, partId: listed.id, title: listed.title, sound: made.sound },
         request: {
-          ...{ id, kind: "pupil-take", bytes: made.sound.size, durationS, effort, measures },
+          ...{ id, takeId: take.id, kind: "pupil-take", bytes: made.sound.size, durationS, effort, measures },
           picture: { waveform, trail, tune },
         },
         at: new Date().toISOString(),
@@ -78,6 +78,15 @@ export function HandInTake({ songId, take, sound }: HandInTakeProps) {
           sending={sending}
           sentWords={`${teacher} gets a mail and can listen for ${part.recordingsKeptDays} days.`}
         />
+      ) : part.takesHandedIn.includes(take.id) ? (
+        <Notice
+          kind="good"
+          title="Handed in"
+          action={<TextLink href={partPath(part.id)}>Open the thread</TextLink>}
+          testID="handed-in"
+        >
+          {`${teacher} has this take. It stands in the thread, where you can take it back.`}
+        </Notice>
       ) : !part.shares ? (
         <>
           <Text variant="small">

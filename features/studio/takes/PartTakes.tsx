@@ -14,6 +14,7 @@ import { studioQueries, useStudioChange } from "../studioQueries";
 import { measuredLine } from "./measuredLine";
 import { RecordAnswer } from "./RecordAnswer";
 import { SendingRow } from "./SendingRow";
+import { takeSender } from "./takeSender";
 import { TakePlayer } from "./TakePlayer";
 import { useSendings } from "./useSendings";
 
@@ -63,7 +64,11 @@ interface TakeCardProps extends Pick<TakesPlace, "comments" | "onTime"> {
 
 function TakeCard({ take, comments, onTime, now }: TakeCardProps) {
   const { id, kind, mine, author, createdAt, expiresAt, effort, measures, state } = take;
-  const remove = useStudioChange(() => http.delete(`/hand-ins/${id}`));
+  const remove = useStudioChange(async () => {
+    await http.delete(`/hand-ins/${id}`);
+    // Where the same take is looked at, it can be handed in again.
+    await takeSender.giveUp(id);
+  });
   const title = kind === "pupil-take" ? "Take" : "Answer";
   const facts = [
     mine ? "you" : author.name,

@@ -49,7 +49,7 @@ export function RecordAnswer({ part }: { part: Part }) {
       await takeSender.handIn({
         ...{ id, accountId: account.id, partId: part.id, title: part.title, sound },
         request: {
-          ...{ id, kind: "teacher-answer", bytes: sound.size, durationS, effort: null, measures: null },
+          ...{ id, takeId: null, kind: "teacher-answer", bytes: sound.size, durationS, effort: null, measures: null },
           picture: { waveform, trail: [], tune: [] },
         },
         at: new Date().toISOString(),

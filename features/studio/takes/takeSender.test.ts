@@ -30,7 +30,16 @@ function become(id: string | null): void {
 
 const aTake = (id = "one"): UnsentTake => ({
   ...{ id, accountId: "maren", partId: "part", title: "Slack Water", at: "2026-12-01T19:20:00.000Z" },
-  request: { id, kind: "pupil-take", bytes: 1000, durationS: 10, effort: 2, measures: null, picture: null },
+  request: {
+    id,
+    takeId: "take",
+    kind: "pupil-take",
+    bytes: 1000,
+    durationS: 10,
+    effort: 2,
+    measures: null,
+    picture: null,
+  },
   sound: new Blob(["x".repeat(1000)]),
 });
 const arrived = { state: "ready" } as HandIn;

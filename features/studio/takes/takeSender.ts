@@ -53,7 +53,8 @@ function show(id: string, change: Partial<Sending>): void {
 
 function add(take: UnsentTake): void {
   kept.set(take.id, take);
-  const { id, takeId = null, partId, title, sound } = take;
+  const { id, partId, title, sound } = take;
+  const { takeId } = take.request;
   const fresh: Sending = {
     ...{ id, takeId, partId, title, bytes: sound.size, sentBytes: 0 },
     ...{ state: "sending", message: null },

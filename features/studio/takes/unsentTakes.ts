@@ -6,8 +6,6 @@ import { unsentHint } from "./unsentHint";
 export interface UnsentTake {
   /** of the hand-in */
   id: string;
-  /** of the take it was made from; none for an answer */
-  takeId?: string;
   /** whose it is; nobody else who uses this device sends it */
   accountId: string;
   partId: string;

@@ -30,9 +30,9 @@ export async function uploadTake(
     const announced = await http.post<HandIn>(`/parts/${partId}/hand-ins`, request);
     if (announced.state === "ready") return announced;
     try {
-      await sendBytes(request.id, sound, onSent, asOwner);
+      await sendBytes(announced.id, sound, onSent, asOwner);
       asOwner();
-      const arrived = await http.get<HandIn>(`/hand-ins/${request.id}`);
+      const arrived = await http.get<HandIn>(`/hand-ins/${announced.id}`);
       if (arrived.state === "ready") return arrived;
     } catch (error) {
       // What paused for long is forgotten on the way: it is announced once more.

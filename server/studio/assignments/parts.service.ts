@@ -43,6 +43,9 @@ export class PartsService {
     const rows: Full[] = await this.dataSource.query(
       `SELECT ${listed}, p.assignment_id AS "assignmentId", p.member_id AS "memberId", p.shift, p.instrument, p.way,
               a.song, a.note, p.note AS "partNote", p.handed_in_at AS "handedInAt", p.effort,
+              ARRAY(SELECT h.take_id FROM hand_ins h
+                    WHERE h.part_id = p.id AND h.author_id = p.member_id AND h.state = 'ready' AND h.take_id IS NOT NULL
+                    ORDER BY h.created_at, h.id) AS "takesHandedIn",
               ${keptDaysColumn}
        FROM ${tables} WHERE p.id = $1`,
       [partId],
@@ -57,8 +60,8 @@ export class PartsService {
       lastTake: handedInAt && { at: handedInAt.toISOString(), effort },
     };
     if (side === "pupil") return part;
-    // The copy stands on the pupil's shelf; the teachers have none there.
-    const seen = { ...part, songId: null };
+    // The copy stands on the pupil's shelf, the takes on the pupil's device; the teachers have none there.
+    const seen = { ...part, songId: null, takesHandedIn: [] };
     return shares ? seen : { ...seen, instrument: null, way: null, state: "assigned", lastTake: null };
   }
 

@@ -13,6 +13,10 @@ export class HandInEntity {
   @Column({ type: "uuid", name: "author_id" })
   authorId!: string;
 
+  /** as the device knows it that recorded it; null for an answer, and once the recording is deleted */
+  @Column({ type: "uuid", name: "take_id", nullable: true })
+  takeId!: string | null;
+
   @Column({ type: "text" })
   kind!: HandIn["kind"];
 

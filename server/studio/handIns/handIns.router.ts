@@ -31,6 +31,7 @@ export function handInsRoutes(api: Api, dataSource: DataSource, objects: ObjectS
       summary: "Announce a recording for this part; then send its bytes to /uploads/<its id>. May be repeated",
       body: { name: "HandInRequest", schema: handInRequest },
       answers: {
+        200: { description: "The same take was handed in before: that recording, by its own id.", schema: recording },
         201: { description: "Announced, or known already: its present state.", schema: recording },
         403: { description: "The pupil does not agree (not-agreed), or it is of the wrong side (wrong-side)." },
         404: { description: "There is no such part within the asker's reach (not-found)." },
@@ -43,7 +44,8 @@ export function handInsRoutes(api: Api, dataSource: DataSource, objects: ObjectS
     async (req, res) => {
       const request = parse(handInRequest, req.body);
       await announcing.take(currentUserId(res));
-      res.status(201).json(await handIns.announce(currentUserId(res), idIn(req.params, "id", "part"), request));
+      const announced = await handIns.announce(currentUserId(res), idIn(req.params, "id", "part"), request);
+      res.status(announced.id === request.id.toLowerCase() ? 201 : 200).json(announced);
     },
   );
   api.route(

@@ -36,21 +36,23 @@ export class HandInsService {
     this.uploads = new Uploads({ objects, locks: this.locks, onComplete: (key) => this.finish(key) });
   }
 
-  /** Makes room for a recording. Said again it changes nothing, but ends what an interrupted answer left unfinished. */
+  /**
+   * Makes room for a recording. Said again it changes nothing, but ends what an interrupted answer left unfinished. Of a take
+   * that was handed in for this part it makes no second one: it tells of the first.
+   */
   async announce(userId: string, partId: string, request: HandInRequest): Promise<HandIn> {
-    const id = request.id.toLowerCase();
-    const key = await this.dataSource.transaction(async (manager) => {
+    const asked = { ...request, id: request.id.toLowerCase() };
+    const { id, storageKey } = await this.dataSource.transaction(async (manager) => {
       await manager.query("SELECT FROM assignment_parts WHERE id = $1 FOR NO KEY UPDATE", [partId]);
       const access = await this.parts.reach(userId, partId, manager);
       refuseUnshared(access);
       if ((request.kind === "teacher-answer") !== (access.side === "teacher"))
         throw new HttpProblem(403, "wrong-side", "Pupils hand in takes, and teachers answer them.");
-      const kept = await manager.findOneBy(HandInEntity, { id });
-      if (!kept) return put(manager, access, { ...request, id });
-      refuseOther(kept, access, request);
-      return kept.storageKey;
+      const kept = await manager.findOneBy(HandInEntity, { id: asked.id });
+      if (kept) refuseOther(kept, access, asked);
+      return kept ?? (await ofSameTake(manager, access, asked)) ?? put(manager, access, asked);
     });
-    await this.begin(key, request.bytes);
+    await this.begin(storageKey, request.bytes);
     return this.get(userId, id);
   }
 
@@ -168,8 +170,27 @@ export class HandInsService {
   }
 }
 
-/** Makes its row; the key by which it will lie in the storage. */
-async function put(manager: EntityManager, access: PartAccess, request: HandInRequest): Promise<string> {
+type Begun = Pick<HandInEntity, "id" | "storageKey">;
+
+/**
+ * What was made from the same take before, under another id; null for an answer and for a new take. One that was given up
+ * on its way goes on, and tells how the take felt as it is said now.
+ */
+async function ofSameTake(
+  manager: EntityManager,
+  access: PartAccess,
+  { takeId, bytes, effort, measures, picture }: HandInRequest,
+): Promise<Begun | null> {
+  if (takeId === null) return null;
+  const kept = await manager.findOneBy(HandInEntity, { partId: access.partId, authorId: access.me.memberId, takeId });
+  if (kept?.state !== "uploading") return kept;
+  refuseOther(kept, access, { bytes });
+  await manager.update(HandInEntity, { id: kept.id, state: "uploading" }, { effort, measures, picture });
+  return kept;
+}
+
+/** Makes its row. */
+async function put(manager: EntityManager, access: PartAccess, request: HandInRequest): Promise<Begun> {
   const { partId, me, recordingsKeptDays } = access;
   if ((await manager.countBy(HandInEntity, { partId, state: Not("deleted") })) >= mostInThread)
     throw new HttpProblem(409, "collection-full", `A thread holds at most ${mostInThread} recordings at a time.`);
@@ -177,7 +198,7 @@ async function put(manager: EntityManager, access: PartAccess, request: HandInRe
   const expiresAt = new Date(Date.now() + recordingsKeptDays * dayMs);
   const row = { ...request, partId, authorId: me.memberId, storageKey, state: "uploading" as const, expiresAt };
   await manager.insert(HandInEntity, row);
-  return storageKey;
+  return row;
 }
 
 function refuseOthers(row: HandInEntity, { me }: PartAccess): void {
@@ -185,7 +206,7 @@ function refuseOthers(row: HandInEntity, { me }: PartAccess): void {
 }
 
 /** The id is taken; that is well if it is by this very recording. */
-function refuseOther(kept: HandInEntity, { partId, me }: PartAccess, { bytes }: HandInRequest): void {
+function refuseOther(kept: HandInEntity, { partId, me }: PartAccess, { bytes }: Pick<HandInRequest, "bytes">): void {
   if (kept.state === "deleted" && kept.authorId === me.memberId)
     throw new HttpProblem(410, "recording-deleted", "This recording was deleted.");
   if (kept.partId !== partId || kept.authorId !== me.memberId || kept.bytes !== bytes)

@@ -28,7 +28,7 @@ export class HandedInTakes implements PersonalDataPart {
 
   readonly files = async (userId: string): Promise<Record<string, unknown>> => {
     const rows: Kept[] = await this.dataSource.query(
-      `SELECT h.id, h.part_id AS "partId", h.kind, h.storage_key AS "storageKey", h.media_type AS "mediaType", h.bytes,
+      `SELECT h.id, h.part_id AS "partId", h.take_id AS "takeId", h.kind, h.storage_key AS "storageKey", h.media_type AS "mediaType", h.bytes,
               h.duration_s AS "durationS", h.effort, h.measures, h.picture, h.state,
               h.created_at AS "createdAt", h.expires_at AS "expiresAt"
        FROM hand_ins h JOIN studio_members m ON m.id = h.author_id WHERE m.user_id = $1 ORDER BY h.created_at`,

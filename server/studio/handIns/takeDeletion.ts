@@ -39,7 +39,7 @@ export async function markDeleted(
       `WITH never AS (
          DELETE FROM hand_ins h WHERE h.state = 'uploading' AND (${condition}) RETURNING h.storage_key, h.part_id
        ), heard AS (
-         UPDATE hand_ins h SET state = 'deleted', picture = NULL, measures = NULL,
+         UPDATE hand_ins h SET state = 'deleted', picture = NULL, measures = NULL, take_id = NULL,
            effort = CASE WHEN $${values.length + 1}::text = 'expired' THEN h.effort END
          WHERE h.state = 'ready' AND (${condition}) RETURNING h.storage_key, h.part_id
        ), gone AS (

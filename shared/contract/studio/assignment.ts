@@ -135,6 +135,8 @@ export const part = z.strictObject({
   note: z.string(),
   partNote: z.string(),
   lastTake,
+  /** for the pupil: which takes lie in the thread, as the device knows them that recorded them */
+  takesHandedIn: z.array(z.uuid()),
   recordingsKeptDays: z.int(),
 });
 export type Part = z.infer<typeof part>;

@@ -37,7 +37,12 @@ const recording = {
  * Announces a recording, before its bytes are sent to /api/uploads/<id> by the tus protocol. The id is made by whoever
  * sends, so that an announcement whose answer was lost can be repeated.
  */
-export const handInRequest = z.strictObject({ id: z.uuid(), ...recording });
+export const handInRequest = z.strictObject({
+  id: z.uuid(),
+  /** the take it was made from, as the device knows it: for each part it is handed in once. Null for an answer */
+  takeId: z.uuid().nullable().default(null),
+  ...recording,
+});
 export type HandInRequest = z.infer<typeof handInRequest>;
 
 /** A recording in the thread of a part. One that was deleted keeps its place, without sound, measures and picture. */

@@ -12,7 +12,7 @@ import type { HandIn, TakePicture } from "@/shared/contract/studio/handIn";
 import { glyphs, noteName } from "@/shared/music/pitch";
 import { clockWords } from "@/features/ui/clockWords";
 import type { TakeTime } from "../parts/takesPlace";
-import { pitchSpan, trailPath, wavePath, xOf, yOf, type PlayerPlace } from "./playerGeometry";
+import { pitchRoom, pitchSpan, trailPath, wavePath, xOf, yOf, type PlayerPlace } from "./playerGeometry";
 import { useTakeSound } from "./useTakeSound";
 
 export interface TakePlayerProps {
@@ -22,7 +22,6 @@ export interface TakePlayerProps {
   onTime: (time: TakeTime | null) => void;
 }
 
-const pitchHeight = 132;
 const waveHeight = 40;
 const namesPx = 34;
 const stepS = 1;
@@ -37,7 +36,13 @@ export function TakePlayer({ take, comments, onTime }: TakePlayerProps) {
   const playing = sound.state !== "still";
   return (
     <View style={{ gap: 8 }} testID="take-player">
-      <SeekArea durationS={durationS} atS={sound.atS} onSeek={sound.seek} what={pictureWords(picture)}>
+      <SeekArea
+        durationS={durationS}
+        atS={sound.atS}
+        onSeek={sound.seek}
+        height={pitchRoom(picture) + waveHeight}
+        what={pictureWords(picture)}
+      >
         {(width) => <Picture picture={picture} durationS={durationS} width={width} atS={sound.atS} marks={marks} />}
       </SeekArea>
       <View style={{ flexDirection: "row", flexWrap: "wrap", alignItems: "center", gap: 10 }}>
@@ -97,6 +102,8 @@ export function TakePlayer({ take, comments, onTime }: TakePlayerProps) {
 interface SeekAreaProps {
   durationS: number;
   atS: number;
+  /** of the picture, px */
+  height: number;
   onSeek: (atS: number) => void;
   /** the picture in words */
   what: string;
@@ -104,7 +111,7 @@ interface SeekAreaProps {
 }
 
 /** Moves through the take by pointer or by arrow keys. */
-function SeekArea({ durationS, atS, onSeek, what, children }: SeekAreaProps) {
+function SeekArea({ durationS, atS, height, onSeek, what, children }: SeekAreaProps) {
   const [width, setWidth] = useState(0);
   const inner = Math.max(0, width - namesPx);
   const seekTo = (event: React.PointerEvent<HTMLDivElement>) => {
@@ -142,7 +149,7 @@ function SeekArea({ durationS, atS, onSeek, what, children }: SeekAreaProps) {
           onSeek(to);
         }}
       >
-        {width > 0 ? children(inner) : <View style={{ height: pitchHeight + waveHeight }} />}
+        {width > 0 ? children(inner) : <View style={{ height }} />}
       </div>
     </View>
   );
@@ -157,21 +164,22 @@ interface PictureProps {
 }
 
 function Picture({ picture, durationS, width, atS, marks }: PictureProps) {
+  const height = pitchRoom(picture);
   const place = useMemo<PlayerPlace>(
-    () => ({ width, height: pitchHeight, durationS, ...pitchSpan(picture) }),
-    [width, durationS, picture],
+    () => ({ width, height, durationS, ...pitchSpan(picture) }),
+    [width, height, durationS, picture],
   );
   const drawn = useMemo(
     () => ({ trail: trailPath(place, picture.trail), wave: wavePath(picture.waveform, width, waveHeight) }),
     [place, picture, width],
   );
-  const octaves = semitonesOf(place).filter((midi) => midi % 12 === 0);
+  const octaves = height === 0 ? [] : semitonesOf(place).filter((midi) => midi % 12 === 0);
   const now = xOf(place, atS);
   return (
     <Svg
       width={width + namesPx}
-      height={pitchHeight + waveHeight}
-      viewBox={`0 0 ${width + namesPx} ${pitchHeight + waveHeight}`}
+      height={height + waveHeight}
+      viewBox={`0 0 ${width + namesPx} ${height + waveHeight}`}
       aria-hidden
     >
       {octaves.map((midi) => (
@@ -198,11 +206,11 @@ function Picture({ picture, durationS, width, atS, marks }: PictureProps) {
         strokeLinecap="round"
         fill="none"
       />
-      <Path d={drawn.wave} fill={colors.inkSoft} opacity={0.55} transform={`translate(0 ${pitchHeight})`} />
+      <Path d={drawn.wave} fill={colors.inkSoft} opacity={0.55} transform={`translate(0 ${height})`} />
       {marks.map((at) => (
-        <Circle key={at} cx={xOf(place, at)} cy={pitchHeight} r={4.5} fill={colors.honey} stroke={colors.ink} />
+        <Circle key={at} cx={xOf(place, at)} cy={Math.max(5, height)} r={4.5} fill={colors.honey} stroke={colors.ink} />
       ))}
-      <Line x1={now} x2={now} y1={0} y2={pitchHeight + waveHeight} stroke={colors.ink} strokeWidth={2} />
+      <Line x1={now} x2={now} y1={0} y2={height + waveHeight} stroke={colors.ink} strokeWidth={2} />
       {octaves.map((midi) => (
         <SvgLabel key={midi} x={width + namesPx - 2} y={yOf(place, midi) + 4} size={12} family="display" anchor="end">
           {glyphs(noteName(midi))}

@@ -1,4 +1,4 @@
-import { pitchSpan, trailPath, wavePath, xOf, yOf } from "./playerGeometry";
+import { pitchRoom, pitchSpan, trailPath, wavePath, xOf, yOf } from "./playerGeometry";
 
 const place = { width: 300, height: 112, durationS: 30, low: 50, high: 62 };
 
@@ -24,4 +24,10 @@ it("breaks the line where nothing was sung, also in a long take whose points lie
 it("draws silence as a thin line and the loudest to both edges", () => {
   expect(wavePath([0, 0.4], 100, 40)).toBe("M0.0 19.3L100.0 0.0L100.0 40.0L0.0 20.8Z");
   expect(wavePath([], 100, 40)).toBe("");
+});
+
+it("keeps room for a pitch where there is one, and none for a spoken answer", () => {
+  const sung = { waveform: [0.2, 0.4], trail: [{ t: 0, midi: 60 }], tune: [] };
+  expect(pitchRoom(sung)).toBeGreaterThan(100);
+  expect(pitchRoom({ ...sung, trail: [] })).toBe(0);
 });

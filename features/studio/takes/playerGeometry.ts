@@ -11,8 +11,14 @@ export interface PlayerPlace {
   high: number;
 }
 
+const pitchHeight = 132;
 const leastSpan = 12;
 const gapS = 0.08;
+
+/** Height for the pitch, px. A spoken answer has none to show: of it only the loudness is drawn. */
+export function pitchRoom({ trail, tune }: TakePicture): number {
+  return trail.length + tune.length > 0 ? pitchHeight : 0;
+}
 
 /** Lowest and highest line shown: round the tune and what was sung, an octave at least. */
 export function pitchSpan({ trail, tune }: TakePicture): { low: number; high: number } {

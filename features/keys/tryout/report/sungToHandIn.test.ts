@@ -2,9 +2,10 @@ import type { MeasuredTry } from "../useTry";
 import { sungToHandIn } from "./sungToHandIn";
 
 const note = (at: number, midi: number, phrase: number) => ({ at, duration: 1, midi, phrase });
-const aTry = (startS: number | null, starts: (number | null)[]): MeasuredTry =>
+const longTake = Array.from({ length: 9000 }, (_, k) => (k < 100 ? null : 220));
+const aTry = (startS: number | null, starts: (number | null)[], f0: (number | null)[] = longTake): MeasuredTry =>
   ({
-    take: { id: "take", report: { f0: Array.from({ length: 9000 }, (_, k) => (k < 100 ? null : 220)) } },
+    take: { id: "take", report: { f0 } },
     key: { tonic: "C", shift: 0 },
     startS,
     plan: { notes: [note(2, 60, 0), note(3, 62, 0), note(6, 64, 1)] },
@@ -33,4 +34,19 @@ it("thins the trail out to 4,000 points at most, and leaves silence out", () => 
   const { trail } = sungToHandIn(aTry(1, [3.5, 7.5]), null);
   expect(trail.length).toBeLessThanOrEqual(4000);
   expect(trail[0]).toEqual({ t: 1.02, midi: 57 });
+});
+
+it("leaves clicks out of the trail, alone and in the middle of singing, but no short sung note", () => {
+  const sung = (hz: number | null, frames: number) => Array.from({ length: frames }, () => hz);
+  const f0 = [
+    ...sung(1046, 2),
+    ...sung(null, 20),
+    ...sung(220, 30),
+    ...sung(1046, 3),
+    ...sung(220, 30),
+    ...sung(330, 8),
+  ];
+  const { trail } = sungToHandIn(aTry(1, [3.5, 7.5], f0), null);
+  expect(trail).toHaveLength(68);
+  expect(new Set(trail.map(({ midi }) => midi))).toEqual(new Set([57, 64.02]));
 });

@@ -17,6 +17,10 @@ export interface SungToHandIn {
 
 const mostPoints = 4000;
 const mostNotes = 2000;
+/** frames of 10 ms; what is shorter is a click or a bump, and a picture would have to stretch to it */
+const leastRun = 5;
+/** semitones from one frame to the next */
+const mostLeap = 7;
 const round = (value: number) => Math.round(value * 100) / 100;
 
 export function sungToHandIn(measured: MeasuredTry, effort: number | null): SungToHandIn {
@@ -26,8 +30,26 @@ export function sungToHandIn(measured: MeasuredTry, effort: number | null): Sung
 
 function trailOf(f0: readonly (number | null)[]): SungToHandIn["trail"] {
   const step = Math.max(1, Math.ceil(f0.length / mostPoints));
-  return f0.flatMap((hz, k) => (hz === null || k % step > 0 ? [] : [{ t: k / 100, midi: round(hzToMidi(hz)) }]));
+  const midis = f0.map((hz) => (hz === null ? null : hzToMidi(hz)));
+  return runsOf(midis)
+    .filter(({ from, to }) => to - from >= leastRun)
+    .flatMap(({ from, to }) => range(from, to).filter((k) => k % step === 0))
+    .map((k) => ({ t: k / 100, midi: round(midis[k]!) }));
 }
+
+/** Stretches of frames that one breath of voice can have sung: without silence and without leaps from frame to frame. */
+function runsOf(midis: readonly (number | null)[]): { from: number; to: number }[] {
+  const runs: { from: number; to: number }[] = [];
+  midis.forEach((midi, k) => {
+    const before = midis[k - 1] ?? null;
+    if (midi === null) return;
+    if (before !== null && Math.abs(midi - before) <= mostLeap) runs.at(-1)!.to = k + 1;
+    else runs.push({ from: k, to: k + 1 });
+  });
+  return runs;
+}
+
+const range = (from: number, to: number) => Array.from({ length: to - from }, (_, k) => from + k);
 
 /**
  * To the backing its notes keep their rhythm and are moved, all alike, to where the phrases were sung: how late sound comes

@@ -5,11 +5,13 @@ import { aPart } from "@/__tests__/client/studioPeople";
 import { queryClient } from "@/features/api/queryClient";
 import { ThemeProvider } from "@/features/ui/ThemeProvider";
 import { HandInTake } from "./HandInTake";
+import type { Sending } from "./takeSender";
 import type { UnsentTake } from "./unsentTakes";
 
 const mockHandIn = jest.fn<Promise<void>, [UnsentTake]>();
 jest.mock("./takeSender", () => ({ takeSender: { handIn: (take: UnsentTake) => mockHandIn(take) } }));
-jest.mock("./useSendings", () => ({ useSendings: () => [] }));
+let mockSendings: Partial<Sending>[] = [];
+jest.mock("./useSendings", () => ({ useSendings: () => mockSendings }));
 jest.mock("@/features/api/SessionProvider", () => ({ useSession: () => ({ account: { id: "maren" } }) }));
 jest.mock("expo-router", () => ({ Link: ({ children }: { children: React.ReactNode }) => <a>{children}</a> }));
 
@@ -19,6 +21,7 @@ let server: Answers;
 
 beforeEach(() => {
   queryClient.clear();
+  mockSendings = [];
   mockHandIn.mockReset().mockResolvedValue(undefined);
   server = new Answers().to("GET /parts", [part]).to(`GET /parts/${part.id}`, part);
   server.install();
@@ -48,6 +51,13 @@ it("hands in under a new id each time, so that one taken back can be handed in a
   expect(sent.map(({ request }) => request.takeId)).toEqual(["take", "take"]);
   expect(new Set([...sent.map(({ id }) => id), "take"]).size).toBe(3);
   expect(sent.map(({ request }) => request.id)).toEqual(sent.map(({ id }) => id));
+});
+
+it("leads to the thread as soon as the take has arrived", async () => {
+  mockSendings = [{ id: "sent", takeId: take.id, state: "sent" }];
+  open();
+  expect((await screen.findByTestId("handed-in")).textContent).toContain("gets a mail");
+  expect(screen.getByText("Open the thread")).toBeTruthy();
 });
 
 it("says after a reload that this take is handed in, and offers it again only once it is taken back", async () => {

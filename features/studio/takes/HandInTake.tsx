@@ -69,6 +69,7 @@ export function HandInTake({ songId, take, sound }: HandInTakeProps) {
     );
   if (!listed || !part) return null;
   const teacher = part.assignedBy ?? "your teacher";
+  const thread = <TextLink href={partPath(part.id)}>Open the thread</TextLink>;
   const otherKey = part.tonic !== tonic || part.shift !== shift;
   return (
     <Card style={{ gap: 12 }} testID="hand-in">
@@ -77,14 +78,10 @@ export function HandInTake({ songId, take, sound }: HandInTakeProps) {
         <SendingRow
           sending={sending}
           sentWords={`${teacher} gets a mail and can listen for ${part.recordingsKeptDays} days.`}
+          sentAction={thread}
         />
       ) : part.takesHandedIn.includes(take.id) ? (
-        <Notice
-          kind="good"
-          title="Handed in"
-          action={<TextLink href={partPath(part.id)}>Open the thread</TextLink>}
-          testID="handed-in"
-        >
+        <Notice kind="good" title="Handed in" action={thread} testID="handed-in">
           {`${teacher} has this take. It stands in the thread, where you can take it back.`}
         </Notice>
       ) : !part.shares ? (

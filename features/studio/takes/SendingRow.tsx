@@ -1,3 +1,4 @@
+import type { ReactNode } from "react";
 import { View } from "react-native";
 import { Button } from "@/features/ui/Button";
 import { Notice } from "@/features/ui/Notice";
@@ -12,14 +13,16 @@ export interface SendingRowProps {
   sending: Sending;
   /** "Ida Fenn gets a mail." */
   sentWords: string;
+  /** where to go once it has arrived */
+  sentAction?: ReactNode;
 }
 
 /** A recording on its way: how far it is, what it waits for, or why it was not taken. */
-export function SendingRow({ sending, sentWords }: SendingRowProps) {
+export function SendingRow({ sending, sentWords, sentAction }: SendingRowProps) {
   const { id, state, bytes, sentBytes, message } = sending;
   if (state === "sent")
     return (
-      <Notice kind="good" title="Handed in" testID="handed-in">
+      <Notice kind="good" title="Handed in" action={sentAction} testID="handed-in">
         {sentWords}
       </Notice>
     );

@@ -108,7 +108,7 @@ function Sound({ picture: { frames }, seconds, playback }: SoundProps) {
           testID="take-play"
         />
         <Text variant="small" tone="soft" style={{ flexShrink: 1 }}>
-          {`${seconds.toFixed(1)} s. The sound stays on this device unless you hand it in.`}
+          {`${seconds.toFixed(1)} s, on this device. Only what you hand in is sent.`}
         </Text>
       </View>
       {playing && (

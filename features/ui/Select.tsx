@@ -10,6 +10,8 @@ export interface SelectProps<Value extends string> {
   onChange: (value: Value) => void;
   /** one of the words of a sentence, underlined; the label is for screen readers only */
   inline?: boolean;
+  /** inline, with nothing above and below: a finger finds it in a place of 48 */
+  alone?: boolean;
   error?: string | undefined;
   testID?: string;
 }
@@ -21,6 +23,7 @@ export function Select<Value extends string>({
   value,
   onChange,
   inline = false,
+  alone = false,
   error,
   testID,
 }: SelectProps<Value>) {
@@ -45,9 +48,7 @@ export function Select<Value extends string>({
         onBlur={() => setFocused(false)}
         style={{
           position: "absolute",
-          inset: 0,
-          width: "100%",
-          height: "100%",
+          ...(alone ? aroundWords : { inset: 0, width: "100%", height: "100%" }),
           opacity: 0,
           cursor: "pointer",
           font: `400 16px/22px ${fonts.text}`,
@@ -100,6 +101,13 @@ function inField(focused: boolean, wrong: boolean): CSSProperties {
     boxShadow: focused ? `0 0 0 1.5px ${colors.plum}` : "none",
   };
 }
+
+/** px; wide enough for a short word, and high enough for its line of 26 */
+const [beside, over] = [6, 11];
+const aroundWords: CSSProperties = {
+  ...{ left: -beside, width: `calc(100% + ${2 * beside}px)` },
+  ...{ top: -over, height: `calc(100% + ${2 * over}px)` },
+};
 
 function inWords(focused: boolean): CSSProperties {
   return {

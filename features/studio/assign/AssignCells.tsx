@@ -1,4 +1,4 @@
-import { useState } from "react";
+import { useState, type ReactNode } from "react";
 import { View } from "react-native";
 import type { Scale } from "@/features/span/ladderGeometry";
 import { SpanBar } from "@/features/span/SpanBar";
@@ -40,12 +40,27 @@ export function PartKey({ part, onDraft }: Omit<PartCellProps, "ways">) {
   return (
     <Select
       inline
+      alone
       label={`Key for ${row.name}`}
       options={options.map(({ shift, label }) => ({ value: String(shift), label }))}
       value={String(key.shift)}
       onChange={(shift) => onDraft(row.memberId, { shift: Number(shift), way: null })}
       testID={`key-${row.memberId}`}
     />
+  );
+}
+
+/** A key and how the song lies in it, beside each other where there is room. */
+export function KeyLine({ children }: { children: ReactNode }) {
+  return (
+    <View
+      style={{
+        ...{ flexDirection: "row", flexWrap: "wrap", columnGap: 16, minHeight: 48 },
+        ...{ alignItems: "center", alignContent: "center" },
+      }}
+    >
+      {children}
+    </View>
   );
 }
 
@@ -85,6 +100,7 @@ export function PartWay({ part, ways, onDraft }: PartCellProps) {
     <View style={{ alignItems: "flex-start", minWidth: 0 }}>
       <Select
         inline
+        alone
         label={`Way for ${row.name}`}
         options={ways.map((way) => ({ value: wayMark(way), label: glyphs(way.title) }))}
         value={wayMark(chosen)}
@@ -129,7 +145,7 @@ export function PartNote({ part: { row, draft }, onDraft }: Omit<PartCellProps, 
 /** Whether a pupil gets the song. */
 export function GiveTick({ part: { row, draft }, onDraft }: Omit<PartCellProps, "ways">) {
   return (
-    <label style={{ display: "flex", width: 40, height: 48, alignItems: "center" }}>
+    <label style={{ display: "flex", width: 48, height: 48, alignItems: "center" }}>
       <Tick
         label={`Give it to ${row.name}`}
         on={draft.chosen}

@@ -4,7 +4,7 @@ import { Text } from "@/features/ui/Text";
 import { colors } from "@/features/ui/theme";
 import { ShownCards } from "@/features/ui/table/ShownCards";
 import { useShownRows } from "@/features/ui/table/useShownRows";
-import { GiveTick, OneKey, PartBand, PartFit, PartKey, PartNote, PartWay } from "./AssignCells";
+import { GiveTick, KeyLine, OneKey, PartBand, PartFit, PartKey, PartNote, PartWay } from "./AssignCells";
 import type { AssignRowsProps, CellsProps } from "./assignRows";
 
 /** The same as cards under one another, for the phone and middle screens. */
@@ -54,11 +54,11 @@ const Card = memo(function Card({ part, ways, onDraft, oneKey, scale, width }: C
       {draft.chosen && (
         <>
           {width > 0 && <PartBand part={part} scale={scale} width={width} />}
-          <View style={{ flexDirection: "row", flexWrap: "wrap", alignItems: "center", columnGap: 16, minHeight: 48 }}>
+          <KeyLine>
             {oneKey ? <OneKey part={part} /> : <PartKey part={part} onDraft={onDraft} />}
             <PartFit part={part} />
-          </View>
-          <View style={{ minHeight: 48, alignItems: "flex-start" }}>
+          </KeyLine>
+          <View style={{ minHeight: 48, alignItems: "flex-start", justifyContent: "center" }}>
             <PartWay part={part} ways={ways} onDraft={onDraft} />
           </View>
         </>

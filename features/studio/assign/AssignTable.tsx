@@ -24,7 +24,7 @@ export function AssignTable(props: AssignTableProps) {
 }
 
 /** px: tick, pupil, key, fit, note; band and way share the rest. */
-const columns = { tick: 40, pupil: 140, key: 140, fit: 176, note: 84 } as const;
+const columns = { tick: 48, pupil: 140, key: 140, fit: 176, note: 84 } as const;
 const taken = Object.values(columns).reduce((sum, each) => sum + each, 0);
 
 function Wide({ parts, ways, onDraft, oneKey = false, scale }: AssignRowsProps) {

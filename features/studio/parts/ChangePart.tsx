@@ -10,7 +10,7 @@ import { Notice } from "@/features/ui/Notice";
 import { QueryState } from "@/features/ui/QueryState";
 import type { Part, PartChange } from "@/shared/contract/studio/assignment";
 import type { RosterRow } from "@/shared/contract/studio/roster";
-import { PartFit, PartKey, PartWay } from "../assign/AssignCells";
+import { KeyLine, PartFit, PartKey, PartWay } from "../assign/AssignCells";
 import { partRequest, pupilParts, wayMark, type PartDraft, type PartsOf } from "../assign/pupilParts";
 import { useWaysOfParts, type UseWays } from "../assign/useWaysOfParts";
 import { pupilKeys } from "../judge/askPupilKeys";
@@ -85,10 +85,10 @@ function Changing({ part, piece, row, useWays, instrumentOf, onDone }: ChangingP
   const change = (_memberId: string, next: Partial<PartDraft>) => setDraft((before) => ({ ...before, ...next }));
   return (
     <>
-      <View style={{ flexDirection: "row", flexWrap: "wrap", alignItems: "center", columnGap: 16, minHeight: 48 }}>
+      <KeyLine>
         <PartKey part={changed} onDraft={change} />
         <PartFit part={changed} />
-      </View>
+      </KeyLine>
       <PartWay part={changed} ways={ways} onDraft={change} />
       <Field
         label={`Note to ${part.pupil}`}

@@ -29,7 +29,7 @@ export function MembersCard({ studio }: { studio: Studio }) {
               <View
                 key={row.memberId}
                 role="listitem"
-                style={{ borderTopWidth: k === 0 ? 0 : 1, borderColor: colors.line, paddingVertical: 2 }}
+                style={{ borderTopWidth: k === 0 ? 0 : 1, borderColor: colors.line, paddingVertical: 4 }}
               >
                 <Member studio={studio} row={row} />
               </View>
@@ -85,13 +85,14 @@ function Member({ studio, row }: { studio: Studio; row: RosterRow }) {
   );
   return (
     <div ref={box}>
-      <View style={{ flexDirection: "row", flexWrap: "wrap", alignItems: "center", columnGap: 16, minHeight: 48 }}>
-        <Text variant="strong" style={{ flexGrow: 1, flexShrink: 1 }}>
-          {row.name}
-        </Text>
+      <View style={{ flexDirection: "row", flexWrap: "wrap", alignItems: "center", columnGap: 16 }}>
+        <View style={{ flexGrow: 1, flexShrink: 1, minHeight: 48, justifyContent: "center" }}>
+          <Text variant="strong">{row.name}</Text>
+        </View>
         {owner && !me ? (
           <Select
             inline
+            alone
             label={`What ${row.name} is here`}
             options={roles}
             value={wanted ?? (row.role === "owner" ? "co-teacher" : row.role)}

@@ -3,7 +3,7 @@ import { Screen } from "@/features/ui/Screen";
 
 export default function GuardianRoute() {
   return (
-    <Screen title="Your word is asked">
+    <Screen title="Your word">
       <GuardianPage />
     </Screen>
   );

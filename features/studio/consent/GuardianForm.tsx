@@ -1,4 +1,4 @@
-import { useState } from "react";
+import { useState, type ReactNode } from "react";
 import { http } from "@/features/api/httpClient";
 import { useServerForm } from "@/features/api/useServerForm";
 import { Form } from "@/features/ui/Form";
@@ -8,8 +8,15 @@ import { Notice } from "@/features/ui/Notice";
 import { Text } from "@/features/ui/Text";
 import { useStudioRefresh } from "../studioQueries";
 
+export interface GuardianFormProps {
+  /** who was named before */
+  asked: string | null;
+  /** what is said over it until somebody is asked here */
+  before?: ReactNode;
+}
+
 /** Names a parent or guardian, who then gets a mail and decides. */
-export function GuardianForm({ asked }: { asked: string | null }) {
+export function GuardianForm({ asked, before }: GuardianFormProps) {
   const refresh = useStudioRefresh();
   const [sentTo, setSentTo] = useState<string | null>(null);
   const { form, end, submit } = useServerForm({ email: asked ?? "" }, async ({ email }) => {
@@ -20,6 +27,7 @@ export function GuardianForm({ asked }: { asked: string | null }) {
   });
   return (
     <Form label="Parent or guardian" onSubmit={submit}>
+      {sentTo === null && before}
       <Text>
         At your age a parent or guardian confirms first. They get a mail with a link. Until they agree, your teachers
         see only your name, and you hand in nothing.

@@ -134,7 +134,7 @@ it("asks those who are too young for a guardian's address, and says that nothing
   expect(server.bodiesOf("POST /guardian")).toEqual([{ email: "parent@orlow.example" }]);
 });
 
-it("asks for no address where a guardian is known and has the mail already", async () => {
+it("asks for no address where a guardian is known and has the mail already, and says once where another one goes", async () => {
   server.to("POST /invites/accept", asPupil({ shares: false, waitsForGuardian: true }));
   server.to("GET /guardian", { ...noGuardian, email: "parent@orlow.example", askedAt: "2026-12-01T18:00:00.000Z" });
   await open();
@@ -146,6 +146,10 @@ it("asks for no address where a guardian is known and has the mail already", asy
   expect((await screen.findByTestId("guardian-known")).textContent).toContain("went to parent@orlow.example");
   expect(screen.getByTestId<HTMLInputElement>("guardian-email").value).toBe("parent@orlow.example");
   expect(screen.getByTestId("ask-guardian").textContent).toBe("Ask once more");
+  server.to("POST /guardian", {}, 202);
+  fireEvent.click(screen.getByTestId("ask-guardian"));
+  expect((await screen.findByTestId("guardian-asked")).textContent).toContain("parent@orlow.example");
+  expect(screen.queryByTestId("guardian-known")).toBeNull();
 });
 
 it("says of a link that is over what to do", async () => {

@@ -15,28 +15,39 @@ import { teaches } from "../StudioPage";
 
 /** After joining: what holds now, and, for those under age, who confirms it. */
 export function Joined({ studio }: { studio: Studio }) {
-  const guardian = useQuery({ ...studioQueries.guardian(), enabled: studio.me.consent.waitsForGuardian });
+  const waits = studio.me.consent.waitsForGuardian;
+  const guardian = useQuery({ ...studioQueries.guardian(), enabled: waits });
   return (
-    <View style={{ gap: 16, maxWidth: 560 }}>
+    <View style={{ gap: 16, maxWidth: 480 }}>
       <EmptyState
         testID="joined"
         title={`You are in “${studio.name}”`}
         text={teaches(studio) ? "You teach there now." : consentWords(studio)}
-        action={<LinkButton label="To the studio" href={`/studio/${studio.id}` as Href} testID="to-joined" />}
+        action={
+          <LinkButton
+            kind={waits ? "secondary" : "primary"}
+            label="To the studio"
+            href={`/studio/${studio.id}` as Href}
+            testID="to-joined"
+          />
+        }
       />
-      {studio.me.consent.waitsForGuardian && (
+      {waits && (
         <Card style={{ gap: 12 }}>
           <Heading level={2}>Parent or guardian</Heading>
           <QueryState query={guardian} title="Whether somebody is asked already could not be opened">
             {({ email, withdrawnAt }) => (
-              <>
-                {email !== null && withdrawnAt === null && (
-                  <Notice kind="good" title="They are asked already" testID="guardian-known">
-                    {`A mail about this studio went to ${email}.`}
-                  </Notice>
-                )}
-                <GuardianForm asked={email} />
-              </>
+              <GuardianForm
+                asked={email}
+                before={
+                  email !== null &&
+                  withdrawnAt === null && (
+                    <Notice kind="good" title="They are asked already" testID="guardian-known">
+                      {`A mail about this studio went to ${email}.`}
+                    </Notice>
+                  )
+                }
+              />
             )}
           </QueryState>
         </Card>

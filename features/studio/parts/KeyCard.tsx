@@ -63,8 +63,10 @@ function PupilLinks({ part: { songId, tonic, shift, shares } }: { part: Part }) 
         testID="sing-it"
         style={grow}
       />
-      <LinkButton kind="secondary" label="Open the sheet" href={to("/sheet")} testID="part-sheet" style={grow} />
-      <LinkButton kind="text" label="The song" href={to("")} testID="part-song" />
+      <View style={[{ flexDirection: "row", flexWrap: "wrap", gap: 10 }, grow]}>
+        <LinkButton kind="secondary" label="Open the sheet" href={to("/sheet")} testID="part-sheet" style={grow} />
+        <LinkButton kind="text" label="The song" href={to("")} testID="part-song" />
+      </View>
     </View>
   );
 }

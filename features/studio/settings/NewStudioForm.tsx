@@ -4,7 +4,9 @@ import { useServerForm } from "@/features/api/useServerForm";
 import { Form } from "@/features/ui/Form";
 import { FormEnd } from "@/features/ui/form/FormEnd";
 import { FormField } from "@/features/ui/form/FormField";
+import { PhoneFoot } from "@/features/ui/PhoneFoot";
 import { Text } from "@/features/ui/Text";
+import { useLayout } from "@/features/ui/useLayout";
 import type { Studio } from "@/shared/contract/studio/studio";
 import { useStudioRefresh } from "../studioQueries";
 import { StudioFields } from "./StudioFields";
@@ -19,6 +21,8 @@ export function NewStudioForm() {
     await refresh();
     router.replace(`/studio/${made.id}` as Href);
   });
+  const phone = useLayout() === "phone";
+  const foot = <FormEnd {...end} sendLabel="Begin the studio" busyLabel="Beginning the studio" testID="make-studio" />;
   return (
     <Form label="A new studio" onSubmit={submit}>
       <Text>
@@ -35,7 +39,7 @@ export function NewStudioForm() {
         autoComplete="name"
         testID="teacher-name"
       />
-      <FormEnd {...end} sendLabel="Begin the studio" busyLabel="Beginning the studio" testID="make-studio" />
+      {phone ? <PhoneFoot>{foot}</PhoneFoot> : foot}
     </Form>
   );
 }

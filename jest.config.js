@@ -5,7 +5,7 @@ const client = {
   moduleNameMapper: { "\\.woff2?$": "<rootDir>/__tests__/client/fontFile.js", ...alias },
   transformIgnorePatterns: [`/${esm}`],
 };
-const swc = [
+const swc = (importInterop) => [
   "@swc/jest",
   {
     jsc: {
@@ -13,18 +13,24 @@ const swc = [
       parser: { syntax: "typescript", decorators: true },
       transform: { legacyDecorator: true, decoratorMetadata: false, useDefineForClassFields: false },
     },
-    module: { type: "commonjs" },
+    module: { type: "commonjs", importInterop },
   },
 ];
 /** Packages that come as ES modules only. */
 const modules = [
   ...["pitchy", "fft\\.js", "@tus", "srvx", "file-type", "strtok3", "token-types", "@tokenizer", "@borewit"],
-  ...["uint8array-extras", "set-cookie-parser"],
+  ...["uint8array-extras", "set-cookie-parser", "music-metadata", "media-typer", "win-guid"],
 ];
 const node = {
   testEnvironment: "node",
-  moduleNameMapper: alias,
-  transform: { "^.+\\.[cm]?[jt]s$": swc },
+  // Their entries bear names ("import", "module-sync") that Node knows and Jest's require does not.
+  moduleNameMapper: {
+    "^music-metadata$": "<rootDir>/node_modules/music-metadata/lib/index.js",
+    "^file-type$": "file-type/node",
+    ...alias,
+  },
+  // Packages take what CommonJS gives as Node gives it to them, our own files as TypeScript does.
+  transform: { "/node_modules/.+\\.[cm]?js$": swc("node"), "^.+\\.[cm]?[jt]s$": swc("swc") },
   transformIgnorePatterns: [`/node_modules/(?!(${modules.join("|")})/)`],
 };
 

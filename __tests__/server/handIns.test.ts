@@ -182,6 +182,24 @@ describe("sending", () => {
     await place.pupil.patch(`/api/uploads/${asked.id}`, page).set(from(0)).expect(404);
   });
 
+  it("deletes what lasts longer than ten minutes by its own bytes, however short it was announced", async () => {
+    const ofLength = (seconds: number) => aWav(44 + 8000 * seconds);
+    const asked = aHandIn(ofLength(660).length, { durationS: 60 });
+    await place.pupil.post(`/api/parts/${place.partId}/hand-ins`, asked).expect(201);
+    const key = await storageKeyOf(server, asked.id);
+    const { body } = await place.pupil
+      .patch(`/api/uploads/${asked.id}`, ofLength(660))
+      .set(from(0))
+      .buffer(true)
+      .expect(422);
+    expect(body).toMatchObject({ code: "invalid", fields: [{ path: "durationS" }] });
+    await server.runJobs();
+    expect(await held(key)).toEqual([]);
+    expect(await listed(place.pupil)).toEqual([]);
+    expect((await partState())?.state).toBe("assigned");
+    await handIn(place.pupil, place.partId, { durationS: 600 }, ofLength(600));
+  });
+
   it("refuses more bytes than were announced, and what is not sent as bytes", async () => {
     const { id } = await announced(1000);
     await place.pupil.patch(`/api/uploads/${id}`, aWav(1001)).set(from(0)).expect(413);

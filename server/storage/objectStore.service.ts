@@ -59,12 +59,11 @@ export class ObjectStore {
     return { url, expiresAt: new Date(signingDate.getTime() + linkLifeS * 1000).toISOString() };
   }
 
-  /** The bytes of an object, or only so many of its first; null if it is not there. */
-  async read(key: string, first?: number): Promise<Uint8Array | null> {
+  /** The bytes of an object; null if it is not there. */
+  async read(key: string): Promise<Uint8Array | null> {
     const { GetObjectCommand } = await import("@aws-sdk/client-s3");
-    const Range = first === undefined ? undefined : `bytes=0-${first - 1}`;
     return this.orNull(async (client) => {
-      const { Body } = await client.send(new GetObjectCommand({ Bucket: this.settings.bucket, Key: key, Range }));
+      const { Body } = await client.send(new GetObjectCommand({ Bucket: this.settings.bucket, Key: key }));
       return Body ? await Body.transformToByteArray() : new Uint8Array();
     });
   }

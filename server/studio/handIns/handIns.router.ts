@@ -139,7 +139,9 @@ export function handInsRoutes(api: Api, dataSource: DataSource, objects: ObjectS
         409: { description: "Bytes from another offset are awaited (upload-refused)." },
         413: { description: "More bytes than were announced (upload-refused)." },
         415: { description: "Not application/offset+octet-stream (unsupported-media-type)." },
-        422: { description: "Not sound that can be played here (not-a-recording); it was deleted." },
+        422: {
+          description: "Not sound that can be played here (not-a-recording), or too long (invalid); it was deleted.",
+        },
       },
     },
     async (req, res) => {

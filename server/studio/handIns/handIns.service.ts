@@ -1,13 +1,14 @@
 import { randomUUID } from "node:crypto";
 import { type DataSource, type EntityManager, Not } from "typeorm";
 import type { HandIn, HandInRequest, SoundLink } from "../../../shared/contract/studio/handIn";
-import { mostTakeBytes } from "../../../shared/contract/studio/takeLimits";
+import { mostTakeBytes, mostTakeS, tooLong } from "../../../shared/contract/studio/takeLimits";
 import { HttpProblem, notFound } from "../../http/httpProblem";
 import type { ObjectStore } from "../../storage/objectStore.service";
 import { type PartAccess, PartAccessService, refuseHidden, refuseUnshared } from "../assignments/partAccess.service";
 import { StudioAccessService } from "../studioAccess.service";
 import { HandInEntity } from "./handIn.entity";
 import { tellPupil, tellTeachers } from "./handInMails";
+import { soundDuration } from "./soundDuration";
 import { soundType, tellingBytes } from "./soundType";
 import { markDeleted, wakeDeletion } from "./takeDeletion";
 import { UploadLocks } from "./uploadLocks";
@@ -15,6 +16,8 @@ import { Uploads } from "./uploads";
 
 /** So many recordings one thread holds at a time. */
 const mostInThread = 100;
+/** So much silence encoders may add to what was recorded. */
+const paddedS = 1;
 const dayMs = 86_400_000;
 
 type Row = HandInEntity & { authorName: string; authorUserId: string };
@@ -112,24 +115,18 @@ export class HandInsService {
 
   /** All bytes are there: looks at them, puts the recording into the thread and tells the other side. */
   private async finish(key: string): Promise<void> {
-    const beginning = await this.objects.read(key, tellingBytes);
-    const mediaType = beginning && (await soundType(beginning));
     const size = await this.objects.size(key);
-    if (!mediaType || size === null || size > mostTakeBytes) {
-      await markDeleted(this.dataSource, "refused", "h.storage_key = $1", [key]);
-      await wakeDeletion(this.dataSource);
-      throw new HttpProblem(
-        422,
-        "not-a-recording",
-        "This is not sound that can be played here: wav, mp3, m4a, ogg, webm or flac. It was deleted.",
-      );
-    }
+    const sound = size === null || size > mostTakeBytes ? null : await this.objects.read(key);
+    const mediaType = sound && (await soundType(sound.subarray(0, tellingBytes)));
+    if (!sound || !mediaType) throw await this.refused(key, notSound());
+    const durationS = await soundDuration(sound, mediaType);
+    if (durationS !== null && durationS > mostTakeS + paddedS) throw await this.refused(key, lastsTooLong());
     await this.dataSource.transaction(async (manager) => {
       const [rows]: [{ id: string; partId: string; kind: string; userId: string }[], number] = await manager.query(
         `UPDATE hand_ins h SET state = 'ready', ready_at = now(), media_type = $2, bytes = $3 FROM studio_members m
          WHERE h.storage_key = $1 AND h.state = 'uploading' AND m.id = h.author_id
          RETURNING h.id, h.part_id AS "partId", h.kind, m.user_id AS "userId"`,
-        [key, mediaType, size],
+        [key, mediaType, sound.length],
       );
       const [row] = rows;
       if (!row) return;
@@ -144,6 +141,13 @@ export class HandInsService {
       );
       await tellTeachers(manager, this.studios, access, row.id);
     });
+  }
+
+  /** Has it deleted, and gives back what is to be said. */
+  private async refused(key: string, problem: HttpProblem): Promise<HttpProblem> {
+    await markDeleted(this.dataSource, "refused", "h.storage_key = $1", [key]);
+    await wakeDeletion(this.dataSource);
+    return problem;
   }
 
   /** A recording and how the asker stands to its part; for whoever has nothing to do with it there is none. */
@@ -200,6 +204,17 @@ async function put(manager: EntityManager, access: PartAccess, request: HandInRe
   await manager.insert(HandInEntity, row);
   return row;
 }
+
+const notSound = () =>
+  new HttpProblem(
+    422,
+    "not-a-recording",
+    "This is not sound that can be played here: wav, mp3, m4a, ogg, webm or flac. It was deleted.",
+  );
+
+/** As an announcement is refused that says so itself. */
+const lastsTooLong = () =>
+  new HttpProblem(422, "invalid", `${tooLong} It was deleted.`, [{ path: "durationS", message: tooLong }]);
 
 function refuseOthers(row: HandInEntity, { me }: PartAccess): void {
   if (row.authorId !== me.memberId) throw new HttpProblem(403, "not-yours", "Only whoever recorded this may do that.");

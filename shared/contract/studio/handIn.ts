@@ -1,6 +1,6 @@
 import { z } from "zod";
 import { songTry } from "../try";
-import { mostTakeBytes, mostTakeS } from "./takeLimits";
+import { mostTakeBytes, mostTakeS, tooLong } from "./takeLimits";
 
 /** The sound and the pitch of a recording as a picture; made on the device that recorded it. */
 const takePicture = z.strictObject({
@@ -25,7 +25,7 @@ const recording = {
   /** what a pupil sang, or what a teacher says or sings to it */
   kind: z.enum(["pupil-take", "teacher-answer"]),
   bytes: z.int().min(1).max(mostTakeBytes, "A recording may have at most 20 MB."),
-  durationS: z.number().min(0).max(mostTakeS, "A recording may last at most ten minutes."),
+  durationS: z.number().min(0).max(mostTakeS, tooLong),
   /** how it felt: 1 easy to 5 straining */
   effort: songTry.shape.effort,
   /** the take held against the tune in the part's key */

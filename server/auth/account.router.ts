@@ -1,3 +1,4 @@
+import { pipeline } from "node:stream/promises";
 import {
   changePasswordRequest,
   endSessionsQuery,
@@ -202,7 +203,8 @@ export function accountRoutes(
       await limits.countCostly(userId);
       const archive = await exportArchive(personalData, userId);
       await log.note("exported", { userId, address: addressOf(req) });
-      res.type("application/zip").attachment("larkspan-export.zip").send(Buffer.from(archive));
+      res.type("application/zip").attachment("larkspan-export.zip");
+      await pipeline(archive, res);
     },
   );
 }

@@ -1,4 +1,4 @@
-import { strToU8, zip } from "fflate";
+import { strToU8, Zip, ZipDeflate, ZipPassThrough } from "fflate";
 
 /**
  * What one domain keeps of a person. Every domain that keeps something registers a part in `createPersonalData`: then
@@ -9,6 +9,8 @@ export interface PersonalDataPart {
   name: string;
   /** the person's files: bytes or text as they are, anything else as JSON */
   files: (userId: string) => Promise<Record<string, unknown>>;
+  /** Further files too large to be held all at once: each is asked for when the one before has been taken. */
+  large?(userId: string): AsyncIterable<readonly [file: string, content: Uint8Array | string]>;
   /** Erases what lies outside the database; rows go with the account. May run more than once. */
   erase?: (userId: string) => Promise<void>;
 }
@@ -19,15 +21,53 @@ const readMe = `This is everything that Larkspan keeps of your account, one fold
 Passwords, codes and keys of sessions are kept only as hashes and are not in here.
 `;
 
-/** All parts in one zip archive. */
-export async function exportArchive(parts: readonly PersonalDataPart[], userId: string): Promise<Uint8Array> {
-  const files: Record<string, Uint8Array> = { "read-me.txt": strToU8(readMe) };
+/**
+ * All parts in one zip archive.
+ *
+ * @param parts what the domains keep
+ * @param userId whose data
+ * @returns the archive, piece by piece. What can go wrong with the rows has gone wrong before the first piece
+ */
+export async function exportArchive(
+  parts: readonly PersonalDataPart[],
+  userId: string,
+): Promise<AsyncGenerator<Uint8Array, void>> {
+  const files: [string, Uint8Array][] = [["read-me.txt", strToU8(readMe)]];
   for (const { name, files: filesOf } of parts) {
-    for (const [file, content] of Object.entries(await filesOf(userId))) files[`${name}/${file}`] = bytesOf(content);
+    for (const [file, content] of Object.entries(await filesOf(userId)))
+      files.push([`${name}/${file}`, bytesOf(content)]);
   }
-  return new Promise((resolve, reject) => {
-    zip(files, { level: 6 }, (error, archive) => (error ? reject(error) : resolve(archive)));
+  return archived(files, parts, userId);
+}
+
+async function* archived(
+  files: readonly [string, Uint8Array][],
+  parts: readonly PersonalDataPart[],
+  userId: string,
+): AsyncGenerator<Uint8Array, void> {
+  const pieces: Uint8Array[] = [];
+  const zip = new Zip((error, piece) => {
+    if (error) throw error;
+    pieces.push(piece);
   });
+  const taken = () => pieces.splice(0);
+  for (const [path, bytes] of files) {
+    const entry = new ZipDeflate(path, { level: 6 });
+    zip.add(entry);
+    entry.push(bytes, true);
+    yield* taken();
+  }
+  for (const part of parts) {
+    for await (const [file, content] of part.large?.(userId) ?? []) {
+      // Sound gets no smaller by packing.
+      const entry = new ZipPassThrough(`${part.name}/${file}`);
+      zip.add(entry);
+      entry.push(bytesOf(content), true);
+      yield* taken();
+    }
+  }
+  zip.end();
+  yield* taken();
 }
 
 function bytesOf(content: unknown): Uint8Array {

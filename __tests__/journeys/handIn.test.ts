@@ -1,7 +1,7 @@
 import { randomUUID } from "node:crypto";
 import type { Page } from "playwright-core";
 import { singTune, singWhenCounted, willSing } from "./countedSinger";
-import { shelfOf } from "./shelfOf";
+import { type Put, shelfOf } from "./shelfOf";
 import { typeCredentials } from "./signIn";
 import { setStage } from "./stage";
 
@@ -35,13 +35,13 @@ const song = {
 };
 const password = "kettle rain window";
 
-/** Signs up, and signs in at the page; the account's shelf. */
-async function comeIn(page: Page, email: string, next: string) {
+/** Signs up, has these songs, and signs in at the page; that ends what signed up. */
+async function comeIn(page: Page, email: string, next: string, ...songs: Parameters<Put>[1][]): Promise<void> {
   const put = await shelfOf(page, email, password, "sign-up");
+  for (const each of songs) await put("songs", each);
   await page.goto(`/account/sign-in?next=${encodeURIComponent(next)}`);
   await typeCredentials(page, email, password);
   await page.waitForURL(`**${next}`);
-  return put;
 }
 
 test("a pupil sings what was given and hands it in over a connection that breaks; the teacher hears it, says something at a time, accepts it, and hears nothing once consent is withdrawn", async () => {
@@ -49,17 +49,17 @@ test("a pupil sings what was given and hands it in over a connection that breaks
   const [songId, studioId, pupilId, teacherId, assignmentId, partId] = Array.from({ length: 6 }, randomUUID);
   await singWhenCounted(pupil.page);
   await comeIn(teacher.page, "ruth.hand-in@example.org", "/songs");
-  const put = await comeIn(pupil.page, "wil.hand-in@example.org", "/songs");
-  await put("songs", { ...song, id: songId!, createdAt: new Date().toISOString() });
+  const given = { ...song, id: songId!, createdAt: new Date().toISOString() };
+  await comeIn(pupil.page, "wil.hand-in@example.org", "/songs", given);
   // The studio as invitation and assignment leave it; journeys of their own go that way.
-  const given = JSON.stringify({ ...song, demo: undefined, tags: undefined }).replaceAll("'", "''");
+  const copy = JSON.stringify({ ...song, demo: undefined, tags: undefined }).replaceAll("'", "''");
   await stage.query(`
     UPDATE users SET birth_year = 1980, country = 'DE', confirmed_at = now() WHERE email LIKE '%.hand-in@example.org';
     INSERT INTO studios (id, owner_id, name) SELECT '${studioId}', id, 'Tuesday upstairs' FROM users WHERE email LIKE 'ruth.hand-in%';
     INSERT INTO studio_members (id, studio_id, user_id, role, name, consent_given_at)
       SELECT '${teacherId}'::uuid, '${studioId}'::uuid, id, 'owner', 'Ruth Callow', NULL FROM users WHERE email LIKE 'ruth.hand-in%'
       UNION ALL SELECT '${pupilId}'::uuid, '${studioId}'::uuid, id, 'pupil', 'Wil Sand', now() FROM users WHERE email LIKE 'wil.hand-in%';
-    INSERT INTO assignments (id, studio_id, assigned_by, song, note) VALUES ('${assignmentId}', '${studioId}', '${teacherId}', '${given}', '');
+    INSERT INTO assignments (id, studio_id, assigned_by, song, note) VALUES ('${assignmentId}', '${studioId}', '${teacherId}', '${copy}', '');
     INSERT INTO assignment_parts (id, studio_id, assignment_id, member_id, song_id, tonic, shift, note)
       VALUES ('${partId}', '${studioId}', '${assignmentId}', '${pupilId}', '${songId}', 'C', 0, '')`);
 
@@ -101,6 +101,11 @@ test("a pupil sings what was given and hands it in over a connection that breaks
   await page.getByTestId("pupil-take").waitFor({ timeout: 60_000 });
   expect(await sending.count()).toBe(0);
   expect(Math.max(0, ...resumedAt)).toBeGreaterThan(0);
+
+  // The page where it was sung, opened anew, knows that this take is handed in.
+  await page.goto(`/songs/${songId}/try`);
+  await page.getByTestId("handed-in").getByText("Open the thread").click();
+  await page.getByTestId("pupil-take").waitFor();
 
   const desk = teacher.page;
   await desk.goto(`/studio/parts/${partId}`);

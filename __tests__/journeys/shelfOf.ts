@@ -1,7 +1,7 @@
 import type { Page } from "playwright-core";
 
 /** Puts a new thing of one kind, such as "songs", onto a shelf as its owner's pages do. */
-type Put = (kind: string, item: { id: string } & Record<string, unknown>) => Promise<void>;
+export type Put = (kind: string, item: { id: string } & Record<string, unknown>) => Promise<void>;
 
 /** The shelf of an account that signs up, or in, without its pages. */
 export async function shelfOf(page: Page, email: string, password: string, enter: "sign-up" | "sign-in"): Promise<Put> {

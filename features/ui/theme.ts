@@ -99,6 +99,9 @@ const derived = `--soft:color-mix(in srgb,var(--plum) 8%,var(--card));
 --selected:color-mix(in srgb,var(--plum) 9%,transparent);
 --rungC:color-mix(in srgb,var(--inkSoft) 45%,var(--line))`;
 
+/** px that the bar and a button over it may cover at the foot of the phone: what takes the focus comes to stand above. */
+const footRoom = sizes.bar + 96;
+
 /** The style sheet that every page carries: the colours of both schemes, focus, accidentals, motion, print. */
 export const themeCss = `
 :root{${properties("morning")};${derived}}
@@ -117,6 +120,7 @@ span.tri.up{clip-path:polygon(0 100%,100% 100%,50% 0)}
 [data-mono] span.mu{display:inline-block;width:.522em;margin:0;text-align:center}
 a{color:inherit;text-decoration:none}
 form{margin:0}
+@media (max-width:${sizes.middleFrom - 1}px){html{scroll-padding-bottom:calc(${footRoom}px + env(safe-area-inset-bottom))}}
 .skip{position:absolute;left:8px;top:-80px;z-index:9;background:var(--card);color:var(--plum);font-weight:600;padding:14px 20px;border-radius:14px;border:1.5px solid var(--plum)}
 .skip:focus{top:8px}
 @media (hover:hover){[role=button]:not([disabled]):not([aria-disabled=true]):hover,button:not([disabled]):hover,a[data-button]:hover{filter:brightness(.94)}}

@@ -2,6 +2,10 @@ import { View } from "react-native";
 import { colors } from "@/features/ui/theme";
 import { webStyle } from "@/features/ui/webStyle";
 
+/** Dots in a row, and the most that are drawn: the notes of a long recording would say nothing as a cloud of them. */
+const rowOf = 12;
+const most = 72;
+
 export interface NoteDotsProps {
   /** "Heard clearly in 14 of 16 notes." */
   words: string;
@@ -10,15 +14,15 @@ export interface NoteDotsProps {
 /** One dot a note, filled where it was heard clearly: the very numbers of the words that stand beside it. */
 export function NoteDots({ words }: NoteDotsProps) {
   const [clear = 0, all = 0] = (words.match(/\d+/g) ?? []).map(Number);
-  if (all === 0) return null;
-  const columns = Math.min(12, Math.max(8, Math.ceil(all / 2)));
+  if (all === 0 || all > most) return null;
+  const columns = Math.ceil(all / Math.ceil(all / rowOf));
   return (
     <View
       aria-hidden
       testID="note-dots"
       style={webStyle({ display: "grid", gridTemplateColumns: `repeat(${columns}, 9px)`, gap: 4, flexShrink: 0 })}
     >
-      {Array.from({ length: Math.min(all, 3 * columns) }, (_, k) => (
+      {Array.from({ length: all }, (_, k) => (
         <View
           key={k}
           style={{

@@ -1,3 +1,4 @@
+import { listWords } from "@/shared/music/listWords";
 import { glyphs, noteName, pitchClass, type Spelling } from "@/shared/music/pitch";
 import type { KeyMark, SingingVoice } from "@/shared/keys/keyScore";
 
@@ -126,11 +127,18 @@ function percent(marks: readonly KeyMark[], zone: KeyMark["zone"]): number {
   return Math.round(100 * marks.filter((mark) => mark.zone === zone).reduce((sum, mark) => sum + mark.share, 0));
 }
 
-function beyondWords(marks: readonly KeyMark[], voice: SingingVoice, spelling: Spelling): string {
-  const names = marks
-    .filter((mark) => mark.zone === "beyond")
-    .map((mark) => `${say(mark.midi, spelling)} ${sideOf(mark.midi, voice)} your range`);
-  return names.length === 0 ? "" : ` Beyond: ${names.join(", ")}.`;
+/** What lies beyond the range, the notes of each side together; null where nothing does. */
+export function beyondWords(
+  marks: readonly { midi: number; zone: KeyMark["zone"] | null }[],
+  voice: SingingVoice,
+  spelling: Spelling,
+): string | null {
+  const beyond = marks.filter(({ zone }) => zone === "beyond").sort((a, b) => a.midi - b.midi);
+  const sides = (["below", "above"] as const).flatMap((side) => {
+    const names = beyond.filter(({ midi }) => sideOf(midi, voice) === side).map(({ midi }) => say(midi, spelling));
+    return names.length > 0 ? [`${listWords(names)} ${side} your range`] : [];
+  });
+  return sides.length > 0 ? `Beyond: ${sides.join("; ")}.` : null;
 }
 
 /** The whole picture in words, for those who do not see it. */
@@ -154,11 +162,12 @@ export function ladderWords(
     parts.push(`Notes from ${say(Math.min(...pitches), spelling)} to ${say(Math.max(...pitches), spelling)}.`);
     if (voice) {
       parts.push(
-        `${percent(marks, "comfort")} % of the time in comfort, ${percent(marks, "reach")} % in reach, ${percent(marks, "beyond")} % beyond.${beyondWords(marks, voice, spelling)}`,
+        `${percent(marks, "comfort")} % of the time in comfort, ${percent(marks, "reach")} % in reach, ${percent(marks, "beyond")} % beyond.`,
+        beyondWords(marks, voice, spelling) ?? "",
       );
     }
   }
-  return parts.join(" ");
+  return parts.filter((part) => part !== "").join(" ");
 }
 
 /** Moves labels apart to `distance`, keeping their order and staying as near to their places as one pass allows. */

@@ -31,3 +31,18 @@ test("the picture is said in words, with and without a voice", () => {
   expect(tessituragramWords(tunePlace(notes, "C", null)!, null)).toEqual(words.slice(0, 3));
   expect(tunePlace([], "C", voice)).toBeNull();
 });
+
+test("notes beyond the range are told together for each side", () => {
+  const wide = [...notes, { start: 8, duration: 1, midi: 53 }, { start: 9, duration: 1, midi: 71 }];
+  expect(tessituragramWords(tunePlace(wide, "C", voice)!, voice).at(-1)).toBe(
+    "Beyond: F3 below your range; B4 and C5 above your range.",
+  );
+});
+
+test("a reach that was not sung yet is called an estimate, as on the keys' page", () => {
+  const guessed = { ...voice, range: { lowMidi: 55, highMidi: 73 }, heard: voice.range };
+  expect(tessituragramWords(tunePlace(notes, "C", guessed)!, guessed).slice(-2)).toEqual([
+    "Of the time 25 % in comfort, 75 % in reach.",
+    "You have sung B♭3 to B♭4 so far; C5 is probably within reach (estimate).",
+  ]);
+});

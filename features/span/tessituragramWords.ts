@@ -1,9 +1,10 @@
+import { listWords } from "@/shared/music/listWords";
 import { glyphs, noteName, pitchClass, type Spelling } from "@/shared/music/pitch";
 import type { SingingVoice } from "@/shared/keys/keyScore";
 import { tonicPitchClass } from "@/shared/music/keyName";
 import type { MelodyNote } from "@/shared/songs/melody";
 import { tessitura, tessituragram, type Tessitura } from "@/shared/songs/tessituragram";
-import { sideOf, zoneOf } from "./ladderGeometry";
+import { beyondWords, zoneOf } from "./ladderGeometry";
 
 /** A note held as long as this many quarter notes is one to camp on. */
 const heldFrom = 3;
@@ -73,10 +74,18 @@ export function tessituragramWords(
     share(zone) > 0 ? [`${percent(share(zone))} ${zoneWords[zone]}`] : [],
   );
   words.push(`Of the time ${parts.join(", ")}.`);
-  const beyond = bars.filter(({ zone }) => zone === "beyond");
-  if (beyond.length > 0)
-    words.push(`Beyond: ${beyond.map(({ midi }) => `${say(midi)} ${sideOf(midi, voice)} your range`).join(", ")}.`);
-  return words;
+  const { heard } = voice;
+  const guessed = heard
+    ? bars.filter(({ midi, zone }) => zone === "reach" && (midi < heard.lowMidi || midi > heard.highMidi))
+    : [];
+  if (heard && guessed.length > 0) {
+    const notes = `${listWords(guessed.map(({ midi }) => say(midi)))} ${guessed.length === 1 ? "is" : "are"}`;
+    words.push(
+      `You have sung ${say(heard.lowMidi)} to ${say(heard.highMidi)} so far; ${notes} probably within reach (estimate).`,
+    );
+  }
+  const beyond = beyondWords(bars, voice, spelling);
+  return beyond ? [...words, beyond] : words;
 }
 
 const zoneWords = { comfort: "in comfort", reach: "in reach", beyond: "beyond your range" } as const;

@@ -56,7 +56,7 @@ function SongPage({ song }: { song: Song }) {
           target={key && { key, shift, decided: decision !== null }}
           card={keys.inHand && <MyKeyCard songId={song.id} inHand={keys.inHand} voice={keys.voice} />}
           decided={<DecisionCard keys={keys} sheet={{ pathname: "/songs/[id]/sheet", params: { id: song.id } }} />}
-          tune={<TunePanel song={song} voice={singer.singing} shift={shift} />}
+          tune={<TunePanel song={song} voice={keys.voice} shift={shift} />}
           keys={<KeyPane song={song} keys={keys} singer={singer.voice} selected={row} onSelect={setLooked} />}
           ways={
             <WayColumn

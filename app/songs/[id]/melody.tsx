@@ -25,7 +25,7 @@ function Melody({ song }: { song: Song }) {
   return (
     <MelodyScreen
       song={song}
-      voice={useSingingVoice().singing}
+      voice={useSingingVoice().forKeys}
       instrument={instrument}
       chooser={<InstrumentSelect owned={owned} value={instrument.id} onChange={choose} />}
       sing={(line) => <SungLine {...line} mostS={longestTuneS} />}

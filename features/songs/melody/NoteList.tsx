@@ -8,7 +8,7 @@ import { glyphs, noteName, type Spelling } from "@/shared/music/pitch";
 import type { MelodyNote } from "@/shared/songs/melody";
 import { lengthSign, lengthWords } from "./lengthWords";
 import type { Chosen } from "./noteHistory";
-import { stepName } from "./scaleStep";
+import { stepName, stepSpoken } from "./scaleStep";
 
 export interface NoteListProps {
   notes: readonly MelodyNote[];
@@ -111,7 +111,7 @@ export function NoteList({
             </Text>
             <Text
               style={webStyle(unseen)}
-            >{`. Note ${index + 1}, ${names === "notes" ? `step ${step}` : name}, ${lengthWords(note.duration)}`}</Text>
+            >{`. Note ${index + 1}, ${names === "notes" ? `step ${stepSpoken(note.midi, homeMidi)}` : name}, ${lengthWords(note.duration)}`}</Text>
           </Pressable>
         );
       })}

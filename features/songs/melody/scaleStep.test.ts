@@ -1,9 +1,18 @@
-import { homeUnder, noteAndStep, readNoteOrStep, stepName } from "./scaleStep";
+import { homeUnder, noteAndStep, readNoteOrStep, stepName, stepSpoken } from "./scaleStep";
 
 test("steps count from the home note, with a sign for each octave", () => {
   expect([62, 57, 74, 65, 50].map((midi) => stepName(midi, 62))).toEqual(["1", "5,", "1'", "♭3", "1,"]);
   expect(noteAndStep(57, 62)).toBe("A3, step 5,");
 });
+
+test("a screen reader hears an octave in words, not a comma", () =>
+  expect([62, 57, 74, 47, 88].map((midi) => stepSpoken(midi, 62))).toEqual([
+    "1",
+    "5 below home",
+    "1, an octave up",
+    "6, 2 octaves down",
+    "2, 2 octaves up",
+  ]));
 
 test.each([
   ["A3", 57],

@@ -15,6 +15,16 @@ export function stepName(midi: number, homeMidi: number): string {
   return `${names[pitchClass(above)] ?? ""}${octave < 0 ? ",".repeat(-octave) : "'".repeat(octave)}`;
 }
 
+/** The same to be heard: "5 below home", "1, an octave up". */
+export function stepSpoken(midi: number, homeMidi: number): string {
+  const octave = Math.floor(Math.round(midi - homeMidi) / 12);
+  const name = names[pitchClass(midi - homeMidi)] ?? "";
+  if (octave === 0) return name;
+  if (octave === -1) return `${name} below home`;
+  const octaves = Math.abs(octave) === 1 ? "an octave" : `${Math.abs(octave)} octaves`;
+  return `${name}, ${octaves} ${octave > 0 ? "up" : "down"}`;
+}
+
 /** Reads "A3", "5,", "b3", "1'" or "5 below home" as a MIDI number; null for anything else. */
 export function readNoteOrStep(text: string, homeMidi: number | null): number | null {
   const named = parseNoteName(text);

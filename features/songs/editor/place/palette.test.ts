@@ -17,11 +17,15 @@ test("a minor key has its own triads", () => {
 });
 
 test("without a key they stand as they came", () => {
-  expect(chordPalette(parseChart("Em  C\nlow tide"), null)).toEqual({
-    own: [
-      { text: "Em", roman: null },
-      { text: "C", roman: null },
-    ],
-    others: [],
-  });
+  expect(chordPalette(parseChart("Em  C\nlow tide"), null).own).toEqual([
+    { text: "Em", roman: null },
+    { text: "C", roman: null },
+  ]);
+});
+
+test("words without any chord yet are offered chords to begin with, none of them twice", () => {
+  const { own, others } = chordPalette(parseChart("low tide and still we row along home\n"), null);
+  expect(own).toEqual([]);
+  expect(texts(others)).toEqual(["C", "G", "D", "A", "E", "F", "Am", "Em", "Dm"]);
+  expect(texts(chordPalette(parseChart("Em  C\nlow tide"), null).others)).not.toContain("Em");
 });

@@ -13,16 +13,24 @@ export interface PaletteChord {
 export interface Palette {
   /** those of the song: I, IV and V first, then vi, ii and iii, then the rest */
   own: PaletteChord[];
-  /** further triads of the key */
+  /** further triads of the key; while there is none, chords to begin with */
   others: PaletteChord[];
 }
 
 const order = [1, 4, 5, 6, 2, 3, 7];
 
+/** Offered while no key is known: the open chords that most songs begin with (common practice). */
+const firstChords = ["C", "G", "D", "A", "E", "F", "Am", "Em", "Dm"];
+
+const keyless = (text: string): PaletteChord => ({ text, roman: null });
+
 /** The chords to choose from: the song's own first, by their numbers, then the rest of the key. */
 export function chordPalette(chart: Chart, key: KeyName | null): Palette {
   const written = chartChords(chart);
-  if (key === null) return { own: written.map((text) => ({ text, roman: null })), others: [] };
+  if (key === null) {
+    const offered = firstChords.filter((text) => !written.includes(text));
+    return { own: written.map(keyless), others: offered.map(keyless) };
+  }
   const own = written.map((text, place) => ({ ...numbered(text, key), place }));
   own.sort((a, b) => a.rank - b.rank || a.place - b.place);
   // First the plainest chord of each step, then what else stands on the same steps.

@@ -10,7 +10,7 @@ const steps = [
   },
   {
     title: "Bring a song",
-    text: "Paste its chords over the words, and say its lowest and highest note. Two songs are here from the start.",
+    text: "Paste its chords over the words, and sing its tune or say its ends. Songs to try are here from the start.",
   },
   {
     title: "Play it in your key",

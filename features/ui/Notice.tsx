@@ -52,7 +52,10 @@ export function Notice({ kind, title, children, action, testID }: NoticeProps) {
           </Text>
         )}
         {typeof children === "string" ? <Text variant="small">{children}</Text> : children}
-        {action}
+        {action !== undefined && action !== null && (
+          // Begins where the words begin, however wide the notice is.
+          <View style={{ flexDirection: "row", flexWrap: "wrap", gap: 8 }}>{action}</View>
+        )}
       </View>
     </View>
   );

@@ -133,7 +133,7 @@ export function CompareTable({
                     part={part}
                     points={row.parts[part]}
                     width={each - 40}
-                    words={partInWords(part, factsOf(row), spellingIn(row.key))}
+                    words={partInWords(part, factsOf(row), spellingIn(row.key), row.beyond)}
                   />
                 ),
                 index === 0 ? { paddingTop: 10 } : {},

@@ -5,6 +5,7 @@ import { whyNotHigher } from "@/shared/keys/whyNotHigher";
 import { distanceWords } from "@/shared/music/moveWords";
 import { glyphs, noteName, type Spelling } from "@/shared/music/pitch";
 import type { KeyRow } from "../keyRows";
+import { BEYOND_COUNTS } from "../partWords";
 import { capitalized, countWord } from "@/shared/music/countWords";
 
 /** "Three keys, side by side" */
@@ -19,13 +20,12 @@ export function whyNotOneHigher(row: KeyRow, rows: readonly KeyRow[]): string | 
 }
 
 /** A part of a score in words: what was measured, not how many points that gives. */
-export function partInWords(part: keyof KeyParts, facts: PartFacts, spelling: Spelling): string {
+export function partInWords(part: keyof KeyParts, facts: PartFacts, spelling: Spelling, beyond = false): string {
   const name = (midi: number) => glyphs(noteName(midi, spelling));
   if (part === "comfort") {
     const { inside } = facts.comfort;
-    return inside > 0.999
-      ? "all of the time in your comfort band"
-      : `${percent(inside)} of the time in your comfort band`;
+    const time = inside > 0.999 ? "all of the time" : `${percent(inside)} of the time`;
+    return `${time} in your comfort band${beyond ? `; ${BEYOND_COUNTS}` : ""}`;
   }
   if (part === "roomAbove") return roomWords(facts.roomAbove.semitones, "top");
   if (part === "roomBelow") return roomWords(facts.roomBelow.semitones, "bottom");

@@ -13,6 +13,10 @@ export interface TextLinkProps {
   style?: StyleProp<TextStyle>;
 }
 
+/** How far beyond its letters a link can be pressed, px; links beneath each other stand `linkGap` apart. */
+const reach = { tall: 14, wide: 6 };
+export const linkGap = 2 * reach.tall;
+
 /** A link among words. */
 export function TextLink({ href, children, size = 14, testID, style }: TextLinkProps) {
   return (
@@ -26,6 +30,11 @@ export function TextLink({ href, children, size = 14, testID, style }: TextLinkP
           fontWeight: "600",
           fontSize: size,
           lineHeight: Math.round(size * 1.45),
+          // Each side by its own name: React Native drops lengths written in one line, and the link shrinks to its letters.
+          paddingVertical: reach.tall,
+          marginVertical: -reach.tall,
+          paddingHorizontal: reach.wide,
+          marginHorizontal: -reach.wide,
         },
         webStyle({
           textDecorationLine: "underline",
@@ -33,8 +42,6 @@ export function TextLink({ href, children, size = 14, testID, style }: TextLinkP
           textUnderlineOffset: 3,
           whiteSpace: "normal",
           display: "inline-block",
-          padding: "10px 6px",
-          margin: "-10px -6px",
         }),
         style,
       ]}

@@ -4,7 +4,7 @@ import { Pressable, View } from "react-native";
 import { Icon } from "@/features/ui/Icon";
 import { RadioDot } from "@/features/ui/RadioDot";
 import { Text } from "@/features/ui/Text";
-import { TextLink } from "@/features/ui/TextLink";
+import { linkGap, TextLink } from "@/features/ui/TextLink";
 import { colors } from "@/features/ui/theme";
 import { tunePath } from "@/features/ui/tunePath";
 import { webProps } from "@/features/ui/webStyle";
@@ -69,22 +69,22 @@ export function WayCard({ way, instrument, chosen, radio, onChoose, full = false
         <RadioDot on={chosen} />
       </Pressable>
       <WayGrids way={way} instrument={instrument} onNeck={links && ((chord) => links.onNeck(way, chord))} {...ticks} />
-      {chosen && links && (
+      {chosen && <LinksOn {...{ way, instrument, links, why }} />}
+      {way.cautions.length > 0 && <Cautions texts={way.cautions} />}
+    </>
+  );
+}
+
+/** The ways on from a way that is chosen, far enough from each other for a finger. */
+function LinksOn({ way, instrument, links, why }: Pick<WayCardProps, "way" | "instrument" | "links" | "why">) {
+  if (!links && why === undefined && way.retune === 0 && way.capo === 0) return null;
+  return (
+    <View style={{ gap: linkGap, marginTop: 16, marginBottom: 8, alignItems: "flex-start" }}>
+      {links && (
         <TextLink href={links.arrange(way)} testID="arrange">
           Other shapes and the right hand
         </TextLink>
       )}
-      {chosen && (way.retune !== 0 || way.capo > 0) && (
-        <TextLink href={tunePath(instrument.id, way.retune, way.capo)}>Tune for this, string by string</TextLink>
-      )}
-      {chosen && why !== undefined && (
-        <View style={{ marginTop: 4 }}>
-          <TextLink href={why} testID="way-to-why">
-            Why this works, step by step
-          </TextLink>
-        </View>
-      )}
-      {way.cautions.length > 0 && <Cautions texts={way.cautions} />}
       {way.retune !== 0 && (
         <TextLink
           href={{
@@ -92,12 +92,19 @@ export function WayCard({ way, instrument, chosen, radio, onChoose, full = false
             params: { instrument: instrument.id, shift: String(way.retune) },
           }}
           testID="to-retune"
-          style={{ marginTop: 6 }}
         >
           Each string, and the order to tune in
         </TextLink>
       )}
-    </>
+      {(way.retune !== 0 || way.capo > 0) && (
+        <TextLink href={tunePath(instrument.id, way.retune, way.capo)}>Tune for this, string by string</TextLink>
+      )}
+      {why !== undefined && (
+        <TextLink href={why} testID="way-to-why">
+          Why this works, step by step
+        </TextLink>
+      )}
+    </View>
   );
 }
 

@@ -4,6 +4,7 @@ import { Button } from "@/features/ui/Button";
 import { Chip } from "@/features/ui/Chip";
 import { Choice } from "@/features/ui/Choice";
 import { Field } from "@/features/ui/Field";
+import { colors } from "@/features/ui/theme";
 import { Form } from "@/features/ui/Form";
 import { IconButton } from "@/features/ui/IconButton";
 import { LiveText } from "@/features/ui/LiveText";
@@ -97,6 +98,12 @@ describe("Field", () => {
     render(<Field label="Song title" value="" onChangeText={onChangeText} />);
     fireEvent.change(screen.getByLabelText("Song title"), { target: { value: "Lantern" } });
     expect(onChangeText).toHaveBeenCalledWith("Lantern");
+  });
+
+  it("shows an example softer than what is typed, so that an empty field is not taken for a full one", () => {
+    render(<Field label="Note" value="" placeholder="G3" onChangeText={() => undefined} />);
+    const { style } = screen.getByLabelText("Note");
+    expect(style.getPropertyValue("--placeholderTextColor")).toBe(colors.inkSoft);
   });
 
   it("says what is wrong, tied to the field", () => {

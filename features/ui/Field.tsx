@@ -81,6 +81,8 @@ export function Field({
           "aria-describedby": note === undefined ? undefined : noteId,
           autoCapitalize: exact ? "none" : undefined,
         })}
+        // Told here: what the sheet says of placeholders is weaker than React Native's own class.
+        placeholderTextColor={colors.inkSoft}
         blurOnSubmit={false}
         spellCheck={!exact && mono !== true}
         autoCorrect={!exact && mono !== true}

@@ -112,7 +112,7 @@ body{margin:0;background:var(--paper);color:var(--ink);font:400 16px/1.45 ${font
 :focus-visible{outline:2px solid var(--plum);outline-offset:3px}
 h1:focus-visible{outline-offset:4px;border-radius:4px}
 input:focus-visible,textarea:focus-visible,select:focus-visible{outline:none}
-input::placeholder,textarea::placeholder{color:var(--inkSoft);opacity:1}
+input::placeholder,textarea::placeholder{opacity:1}
 span.mu{font-family:${fonts.music};font-weight:400;font-size:1.16em;line-height:0;position:relative;top:-.14em;margin:0 .01em;-webkit-text-stroke:.022em currentColor}
 span.mu.fl{top:-.09em}
 span.tri{display:inline-block;width:.82em;height:.68em;overflow:hidden;text-indent:-9em;white-space:nowrap;background:currentColor;clip-path:polygon(0 0,100% 0,50% 100%)}

@@ -19,7 +19,6 @@ test.each([
     await page.getByTestId("player-add").click();
     const ways = page.getByTestId("player-ways").getByRole("radio");
     await ways.nth(1).click();
-    await page.getByTestId("adding-player").click();
     await page.getByTestId("player-name").fill("Tede");
     await page.getByTestId("player-instrument").selectOption("whistle-D");
     await page.getByTestId("player-add").click();

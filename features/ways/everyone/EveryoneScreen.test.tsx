@@ -57,7 +57,6 @@ test("an empty line-up says what it will be, asks for a name, and takes players 
   fireEvent.submit(screen.getByRole("form"));
   expect(within(screen.getByTestId("player")).getByRole("heading").textContent).toBe("Maren");
   await waitFor(() => expect(screen.getAllByRole("radio").length).toBeGreaterThan(1));
-  fireEvent.click(screen.getByTestId("adding-player"));
   fireEvent.change(screen.getByTestId("player-name"), { target: { value: "Tede" } });
   fireEvent.change(screen.getByTestId("player-instrument"), { target: { value: "whistle-D" } });
   fireEvent.submit(screen.getByRole("form"));

@@ -169,7 +169,11 @@ export function EveryoneScreen(props: EveryoneScreenProps) {
               <AddPlayer
                 offered={offered}
                 first={first}
-                onAdd={(player) => change([...players, player], `${player.name} is in the line-up.`)}
+                onAdd={(player) => {
+                  // A band is typed in one go: the fields stay until somebody says that it is everybody.
+                  setAdding(true);
+                  change([...players, player], `${player.name} is in the line-up.`);
+                }}
               />
             )}
           </View>

@@ -159,3 +159,25 @@ describe("safety and honesty", () => {
     expect(ways[0]).toMatchObject({ kind: "as-is", chords: [], difficulty: 0 });
   });
 });
+
+describe("a way that somebody has settled on", () => {
+  const song = { chords: ["D", "G", "A"], from: major("D"), to: major("C"), instrument: guitar };
+  const wishes = { ...defaultPreferences, barre: 1, capo: 1, highestCapo: 3 };
+  const settled = { retune: 0, capo: 8, shapeKey: "E" };
+  const moves = ({ retune, capo, shapeKey }: Way) => ({ retune, capo, shapeKey });
+
+  test("is found whatever is wished for, last where it is not worth proposing, and changes nothing else", () => {
+    const without = findWays({ ...song, preferences: wishes });
+    expect(without.map(moves)).not.toContainEqual(settled);
+    const ways = findWays({ ...song, preferences: wishes, settled });
+    expect(ways.map(moves)).toEqual([...without.map(moves), settled]);
+    const best = moves(without[0]!);
+    expect(findWays({ ...song, preferences: wishes, settled: best })).toEqual(without);
+  });
+
+  test("is not found where it leads into another key, or where a string could snap", () => {
+    const found = (other: typeof settled, to = song.to) => findWays({ ...song, to, settled: other }).map(moves);
+    expect(found({ ...settled, shapeKey: "G" })).not.toContainEqual({ ...settled, shapeKey: "G" });
+    expect(found({ retune: 5, capo: 0, shapeKey: "G" })).toEqual(findWays(song).map(moves));
+  });
+});

@@ -9,6 +9,7 @@ import { glyphs, noteName } from "@/shared/music/pitch";
 import type { Sheet, SheetStrokes, SheetTune } from "@/shared/sheets/sheet";
 import { chartChords, parseChart } from "@/shared/songs/chart";
 import { partOrder } from "@/shared/songs/partOrder";
+import { playedChords } from "@/shared/songs/playedChords";
 import type { WayAddress, WayMoves } from "@/shared/ways/askedWay";
 import type { Shape, Way } from "@/shared/ways/way";
 
@@ -97,11 +98,14 @@ export function writtenKey({ writtenKey: key, tune }: Pick<Song, "writtenKey" | 
   return key ?? (tune && { tonic: tune.home, mode: "major" });
 }
 
-/** A song's chords and its key; null where it lacks either. */
-export function chordsOf(song: Song): { chords: string[]; from: KeyName } | null {
+/** A song's chords, the same as they are played, and its key; null where it lacks either. */
+export function chordsOf(
+  song: Pick<Song, "chart" | "writtenKey" | "tune">,
+): { chords: string[]; sequence: string[]; from: KeyName } | null {
   const from = writtenKey(song);
-  const chords = chartChords(parseChart(song.chart));
-  return from && chords.length > 0 ? { chords, from } : null;
+  const chart = parseChart(song.chart);
+  const chords = chartChords(chart);
+  return from && chords.length > 0 ? { chords, sequence: playedChords(chart), from } : null;
 }
 
 function factsOf({ beatsPerBar, tempo }: Pick<Song, "beatsPerBar" | "tempo">): string {

@@ -1,6 +1,7 @@
 import { queryOptions, skipToken, useQueries } from "@tanstack/react-query";
 import type { Instrument } from "@/shared/instruments/instrument";
 import type { KeyName } from "@/shared/music/keyName";
+import type { WayMoves } from "@/shared/ways/askedWay";
 import type { Way } from "@/shared/ways/way";
 import { searchWays } from "./search/waySearch";
 import { preferencesOf, type Wishes } from "./wishes/wishes";
@@ -14,6 +15,8 @@ export interface Playing {
   from: KeyName;
   instrument: Instrument;
   wishes: Wishes;
+  /** a way that was settled on, to be found whatever the wishes are */
+  settled?: WayMoves | null;
 }
 
 export const wayQueries = {
@@ -38,9 +41,9 @@ function sameBut(before: readonly unknown[] | undefined, playing: Playing | null
 }
 
 function search(playing: Playing, to: KeyName, signal: AbortSignal): Promise<Way[]> {
-  const { chords, sequence, from, instrument, wishes } = playing;
-  const preferences = preferencesOf(wishes, instrument);
-  return searchWays({ chords, ...(sequence ? { sequence } : null), from, to, instrument, preferences }, signal);
+  const { wishes, ...question } = playing;
+  const preferences = preferencesOf(wishes, question.instrument);
+  return searchWays({ ...question, to, preferences }, signal);
 }
 
 /** The ways into each key, best first: undefined while they are searched, null where there is nothing to search. */

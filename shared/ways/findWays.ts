@@ -1,5 +1,6 @@
 import { drawnShape } from "./findShapes";
 import { easeOf } from "./shapeEase";
+import type { WayMoves } from "./askedWay";
 import type { Way, WayChord } from "./way";
 import { wayCandidates, type WayCandidate, type WaysQuestion } from "./wayCandidates";
 import { worthwhileInOrder } from "./wayOrder";
@@ -11,7 +12,8 @@ import { travelWords } from "./travelWords";
  *
  * Ways with an unsafe string are left out, and so are those that another way beats or equals in everything, and those
  * whose capo only undoes the retune. Ways with fewer missing shapes come first, then those that cost less; disliking
- * something more never promotes a way that has more of it. `differentWays` picks the best of each kind.
+ * something more never promotes a way that has more of it. `differentWays` picks the best of each kind. A way that
+ * was settled on and is not worth proposing stands last.
  *
  * @param question chords, keys, instrument and the player's wishes
  * @returns ways, best first; one with nothing retuned and no capo is always among them
@@ -19,7 +21,15 @@ import { travelWords } from "./travelWords";
  * @see common practice: G shapes with capo 7 sound in D; strings A-D-F♯ let down a whole tone play D shapes in C
  */
 export function findWays(question: WaysQuestion): Way[] {
-  return worthwhileInOrder(wayCandidates(question)).map((candidate) => toWay(candidate, question));
+  const candidates = wayCandidates(question);
+  const found = worthwhileInOrder(candidates);
+  const { settled } = question;
+  const kept = settled && candidates.find((each) => isSameWay(each, settled));
+  return [...found, ...(kept && !found.includes(kept) ? [kept] : [])].map((candidate) => toWay(candidate, question));
+}
+
+function isSameWay({ retune, capo, shapeKey }: WayCandidate, settled: WayMoves): boolean {
+  return retune === settled.retune && capo === settled.capo && shapeKey.tonic === settled.shapeKey;
 }
 
 function toWay(candidate: WayCandidate, { to, instrument }: WaysQuestion): Way {

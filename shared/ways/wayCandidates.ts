@@ -7,6 +7,7 @@ import { missingShapes } from "./missingShapes";
 import { playedKey, type PlayedKey } from "./playedKey";
 import { neckStock } from "./shapeLibrary";
 import { songFlow, type SongFlow } from "./songFlow";
+import type { WayMoves } from "./askedWay";
 import type { StringChange, Way, WayPreferences } from "./way";
 
 /** What is to be played, where it shall sound, and on what. */
@@ -21,6 +22,8 @@ export interface WaysQuestion {
   to: KeyName;
   instrument: Instrument;
   preferences?: WayPreferences;
+  /** a way somebody has settled on: it is among the answers whatever the wishes are, unless a string is in danger */
+  settled?: WayMoves | null;
 }
 
 /** Wishes of somebody who has not said any. */
@@ -84,10 +87,12 @@ export function wayCandidates(question: WaysQuestion): WayCandidate[] {
   const shapes = new ShapesByKey(written, from, to, instrument, flow, wishes);
   const topCapo = Math.max(0, Math.min(highestCapo, instrument.capoTo, wishes.highestCapo));
   const candidates: WayCandidate[] = [];
+  const { settled } = question;
   for (const retune of retunes) {
     const strings = stringChanges(instrument, retune);
     if (strings.some(({ verdict }) => verdict === "unsafe")) continue;
-    for (let capo = 0; capo <= topCapo; capo++) {
+    for (let capo = 0; capo <= Math.min(highestCapo, instrument.capoTo); capo++) {
+      if (capo > topCapo && !(settled?.capo === capo && settled.retune === retune)) continue;
       const raised = fretSemitones(instrument, capo);
       if (raised === null) continue;
       const shapePc = (target - retune - raised + 60) % 12;

@@ -33,12 +33,14 @@ function Shared({ shared, token }: { shared: SharedSheet; token: string }) {
   const { instrument, owned, choose } = useInstrument(`shared ${token}`, asked.instrument ?? view.instrument);
   const { key, shift } = askedKey(song, null, asked.key ?? view.tonic, asked.shift ?? String(view.shift));
   const chords = useMemo(() => chordsOf(song), [song]);
-  const found = useQuery(wayQueries.into(chords && { ...chords, instrument, wishes }, key));
+  // Who sent the link may wish for other things than who opens it: the way it was made with is found all the same.
+  const kept = view.instrument === instrument.id && view.shift === shift ? view.way : null;
+  const found = useQuery(wayQueries.into(chords && { ...chords, instrument, wishes, settled: kept }, key));
   const inHand = useSheetInHand({
     ...{ song, key, shift, instrument, asked },
     singer: null,
     ways: found.data,
-    kept: view.instrument === instrument.id && view.shift === shift ? view.way : null,
+    kept,
     ask: (change) => router.setParams(change as Record<string, string>),
   });
   return (

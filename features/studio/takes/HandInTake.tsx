@@ -108,6 +108,7 @@ export function HandInTake({ songId, take, sound }: HandInTakeProps) {
           )}
           <View style={{ alignSelf: "flex-start" }}>
             <Button
+              kind="secondary"
               small
               icon="check"
               label={`Hand in to ${teacher}`}

@@ -25,11 +25,20 @@ it("tells each event in words, with whom and by whom, and never an address of th
         byUserId: null,
         addressHash: null,
       },
+      {
+        id: "5",
+        at: "2026-03-03T13:00:00.000Z",
+        what: "email-change-asked",
+        userId: null,
+        byUserId: null,
+        addressHash: null,
+      },
     ],
   };
   show(<EventsPage />);
   expect(await screen.findByText("Role changed")).toBeTruthy();
   expect(screen.getByText("Sign in refused")).toBeTruthy();
+  expect(screen.getByText("E-mail change asked")).toBeTruthy();
   for (const cell of ["10000000", "20000000", "abcdef01"]) expect(screen.getByText(cell)).toBeTruthy();
 });
 

@@ -7,7 +7,10 @@ import { adminQueries } from "./adminQueries";
 import { Records } from "./Records";
 import { ShowMore } from "./ShowMore";
 
-const sentence = (what: string) => `${what.charAt(0).toUpperCase()}${what.slice(1).replaceAll("-", " ")}`;
+function sentence(what: string): string {
+  const words = what.replaceAll("-", " ").replace(/\bemail\b/, "e-mail");
+  return `${words.charAt(0).toUpperCase()}${words.slice(1)}`;
+}
 
 /** What touched the safety of accounts, newest first. Addresses are hashed: equal signs are one address. */
 export function EventsPage() {

@@ -1,4 +1,4 @@
-import { fireEvent, screen, waitFor } from "@testing-library/react";
+import { act, fireEvent, screen, waitFor } from "@testing-library/react";
 import { refusal, setAccountStage, show, submit, type, valueOf } from "@/__tests__/client/accountStage";
 import { PeoplePage } from "./PeoplePage";
 
@@ -16,6 +16,11 @@ const person = (k: number, change: object = {}) => ({
   ...change,
 });
 const page = (from: number, count: number) => Array.from({ length: count }, (_, k) => person(from + k));
+
+beforeEach(() => {
+  // jsdom scrolls nothing.
+  Element.prototype.scrollIntoView = () => undefined;
+});
 
 /** Fifty rows take a busy machine more than a moment. */
 const shown = (words: string | RegExp) => screen.findByText(words, {}, { timeout: 10_000 });
@@ -56,7 +61,7 @@ it("looks for a part of an address, keeps it in the field, and says when nobody 
   expect(valueOf("Part of an e-mail address")).toBe(" captain ");
 });
 
-it("suspends somebody and lets them in again, and gives another role", async () => {
+it("suspends somebody and lets them in again, and gives another role, each after it was asked", async () => {
   const { id } = person(1);
   stage.answers["GET /admin/users"] = { status: 200, body: [person(1)] };
   stage.answers[`PUT /admin/users/${id}/suspension`] = { status: 200, body: person(1, { suspended: true }) };
@@ -65,12 +70,33 @@ it("suspends somebody and lets them in again, and gives another role", async () 
   const suspend = await screen.findByRole("button", { name: "Suspend: singer-1@orlow.example" });
   stage.answers["GET /admin/users"] = { status: 200, body: [person(1, { suspended: true })] };
   fireEvent.click(suspend);
+  expect(screen.getByRole("group", { name: "Suspend singer-1@orlow.example?" })).toBeTruthy();
+  fireEvent.click(screen.getByTestId("remove-confirmed"));
   expect(await screen.findByRole("button", { name: "Let in again: singer-1@orlow.example" })).toBeTruthy();
+  expect(screen.queryByTestId("remove-asked")).toBeNull();
   fireEvent.change(screen.getByRole("combobox", { name: "Role of singer-1@orlow.example" }), {
     target: { value: "teacher" },
   });
+  fireEvent.click(screen.getByText("Make them a teacher"));
   await waitFor(() => expect(stage.sent(`PUT /admin/users/${id}/role`)).toEqual([{ role: "teacher" }]));
   expect(stage.sent(`PUT /admin/users/${id}/suspension`)).toEqual([{ suspended: true }]);
+});
+
+it("makes nobody an administrator by an arrow key alone, and goes back to the list of roles", async () => {
+  const { id } = person(1);
+  stage.answers["GET /admin/users"] = { status: 200, body: [person(1)] };
+  show(<PeoplePage />);
+  const role = await screen.findByRole<HTMLSelectElement>("combobox", { name: "Role of singer-1@orlow.example" });
+  act(() => role.focus());
+  fireEvent.change(role, { target: { value: "admin" } });
+  expect(screen.getByRole("group", { name: "Make singer-1@orlow.example an administrator?" })).toBe(
+    document.activeElement,
+  );
+  fireEvent.click(screen.getByText("Leave it"));
+  expect(screen.queryByTestId("remove-asked")).toBeNull();
+  expect(document.activeElement).toBe(role);
+  expect(role.value).toBe("singer");
+  expect(stage.sent(`PUT /admin/users/${id}/role`)).toEqual([]);
 });
 
 it("says that nothing was changed where the server refuses", async () => {
@@ -79,7 +105,8 @@ it("says that nothing was changed where the server refuses", async () => {
   stage.answers[`PUT /admin/users/${id}/suspension`] = refusal(409, "own-account", "Leave your own account to others.");
   show(<PeoplePage />);
   fireEvent.click(await screen.findByText("Suspend"));
-  expect((await screen.findByRole("alert")).textContent).toMatch(/Nothing was changed.*Leave your own account/);
+  fireEvent.click(screen.getByTestId("remove-confirmed"));
+  expect(await screen.findByText(/Nothing was changed.*Leave your own account/)).toBeTruthy();
 });
 
 it("says that the people could not be listed, with a way to try again", async () => {

@@ -1,5 +1,5 @@
 import { useInfiniteQuery, useMutation, useQueryClient } from "@tanstack/react-query";
-import { useState } from "react";
+import { useRef, useState } from "react";
 import { View } from "react-native";
 import { http } from "@/features/api/httpClient";
 import { useSession } from "@/features/api/SessionProvider";
@@ -7,13 +7,14 @@ import { Button } from "@/features/ui/Button";
 import { Field } from "@/features/ui/Field";
 import { Form } from "@/features/ui/Form";
 import { LiveText } from "@/features/ui/LiveText";
-import { Notice } from "@/features/ui/Notice";
 import { QueryState } from "@/features/ui/QueryState";
+import { Question } from "@/features/ui/Question";
 import { Select } from "@/features/ui/Select";
 import type { Role } from "@/shared/contract/account";
 import type { AdminUser } from "@/shared/contract/admin";
 import { momentInWords } from "../momentInWords";
 import { adminQueries } from "./adminQueries";
+import { changeWords, type AdminChange } from "./changeWords";
 import { Records } from "./Records";
 import { ShowMore } from "./ShowMore";
 
@@ -40,11 +41,26 @@ export function PeoplePage() {
   const [typed, setTyped] = useState("");
   const [q, setQ] = useState("");
   const query = useInfiniteQuery(adminQueries.users(q));
+  /** chosen, and asked about before it happens: an arrow key in a list of roles is no decision */
+  const [wanted, setWanted] = useState<AdminChange | null>(null);
+  /** what was pressed, to go back to */
+  const pressed = useRef<Element | null>(null);
+  const leave = () => {
+    setWanted(null);
+    if (pressed.current instanceof HTMLElement) pressed.current.focus();
+  };
   const change = useMutation({
-    mutationFn: ({ id, what, body }: { id: string; what: "role" | "suspension"; body: object }) =>
-      http.put<AdminUser>(`/admin/users/${id}/${what}`, body),
-    onSuccess: () => client.invalidateQueries({ queryKey: ["admin"] }),
+    mutationFn: ({ user: { id }, what, body }: AdminChange) => http.put<AdminUser>(`/admin/users/${id}/${what}`, body),
+    onSuccess: () => {
+      leave();
+      return client.invalidateQueries({ queryKey: ["admin"] });
+    },
   });
+  const ask = (next: AdminChange) => {
+    pressed.current = document.activeElement;
+    change.reset();
+    setWanted(next);
+  };
   return (
     <View style={{ gap: 16 }}>
       <Form label="Look for people" onSubmit={() => setQ(typed.trim())}>
@@ -55,10 +71,17 @@ export function PeoplePage() {
           </View>
         </View>
       </Form>
-      {change.error && (
-        <Notice kind="error" title="Nothing was changed">
-          {change.error.message}
-        </Notice>
+      {wanted && (
+        <Question
+          key={`${wanted.user.id} ${wanted.what}`}
+          {...changeWords(wanted)}
+          failed="Nothing was changed."
+          keepLabel="Leave it"
+          onConfirm={() => change.mutate(wanted)}
+          onKeep={leave}
+          busy={change.isPending}
+          error={change.error}
+        />
       )}
       <QueryState query={query} title="The people could not be listed">
         {({ pages }) => (
@@ -82,7 +105,7 @@ export function PeoplePage() {
                     label={`Role of ${user.email}`}
                     options={roles}
                     value={user.role}
-                    onChange={(role) => change.mutate({ id: user.id, what: "role", body: { role } })}
+                    onChange={(role) => ask({ user, what: "role", body: { role } })}
                   />
                 ),
                 standing(user),
@@ -96,10 +119,8 @@ export function PeoplePage() {
                     small
                     label={user.suspended ? "Let in again" : "Suspend"}
                     accessibleName={`${user.suspended ? "Let in again" : "Suspend"}: ${user.email}`}
-                    busy={change.isPending && change.variables.id === user.id}
-                    onPress={() =>
-                      change.mutate({ id: user.id, what: "suspension", body: { suspended: !user.suspended } })
-                    }
+                    busy={change.isPending && change.variables.user.id === user.id}
+                    onPress={() => ask({ user, what: "suspension", body: { suspended: !user.suspended } })}
                   />
                 ),
               ]}

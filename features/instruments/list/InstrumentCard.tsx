@@ -4,7 +4,7 @@ import { Card } from "@/features/ui/Card";
 import { Chip } from "@/features/ui/Chip";
 import { Heading } from "@/features/ui/Heading";
 import { Text } from "@/features/ui/Text";
-import { TextLink } from "@/features/ui/TextLink";
+import { linkGap, TextLink } from "@/features/ui/TextLink";
 import { tunePath } from "@/features/ui/tunePath";
 import { useUnits } from "@/features/ui/useUnits";
 import { webStyle } from "@/features/ui/webStyle";
@@ -64,7 +64,7 @@ export function InstrumentCard({ offered: { instrument, own }, busy, onFavourite
             testID={`left-handed-${instrument.id}`}
           />
         </View>
-        <View style={{ flexDirection: "row", flexWrap: "wrap", columnGap: 20, paddingVertical: 6 }}>
+        <View style={{ flexDirection: "row", flexWrap: "wrap", columnGap: 20, rowGap: linkGap, paddingVertical: 12 }}>
           <TextLink
             href={
               own

@@ -16,8 +16,17 @@ export function RetuneCards({ plan, units, onChange }: RetuneRowsProps) {
       {plan.changes.map((change, index) => (
         <View key={index} role="listitem" testID={`retune-string-${index}`}>
           <Card style={{ gap: 4, paddingVertical: 10 }}>
-            <View style={{ flexDirection: "row", justifyContent: "space-between", alignItems: "center", gap: 8 }}>
-              <Heading level={3} size={16}>
+            {/* On the narrowest phones the stepper goes beneath: "E2 to F2" is read in one line. */}
+            <View
+              style={{
+                flexDirection: "row",
+                flexWrap: "wrap",
+                justifyContent: "space-between",
+                alignItems: "center",
+                columnGap: 8,
+              }}
+            >
+              <Heading level={3} size={16} style={{ flexShrink: 0 }}>
                 {change.semitones === 0 ? glyphs(change.string) : `${glyphs(change.string)} to ${glyphs(change.to)}`}
               </Heading>
               <ShiftStepper

@@ -47,12 +47,20 @@ export function HeardResult({ result, recorder, again, onKept }: HeardResultProp
       footer={
         choosing !== null ? null : (
           <View style={{ flexDirection: "row", flexWrap: "wrap", gap: 10 }}>
-            <Button kind="secondary" icon="again" label={again.label} onPress={again.onPress} testID="sing-again" />
+            <Button
+              kind="secondary"
+              icon="again"
+              label={again.label}
+              onPress={again.onPress}
+              // Fills its line where both do not stand on one.
+              style={{ flexGrow: 1 }}
+              testID="sing-again"
+            />
             <Button
               label="Keep this voice"
               busy={keep.isPending || voices.isPending || result.judgingPart}
               onPress={() => startKeeping("voice")}
-              style={{ flexGrow: 1 }}
+              style={{ flexGrow: 99 }}
               testID="sing-keep"
             />
           </View>

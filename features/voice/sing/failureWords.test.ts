@@ -15,3 +15,14 @@ it("names the time of an interruption, unless nothing was sung before it", () =>
   expect(brokenOff("hidden", 3.4).happened).toMatch(/^This page went into the background at 3 s\./);
   expect(brokenOff("stalled", 0).happened).toBe("The microphone stopped sending sound.");
 });
+
+it.each(["too-short", "too-quiet", "too-noisy", "clipped", "not-singing", "several-voices"] as const)(
+  "asks nobody to sing into a microphone when a recording was refused as %s",
+  (kind) => {
+    const report = { sentence: "Hardly any sound reached the microphone.", nextStep: "Move closer, and sing again." };
+    const { title, happened, next } = failureWords({ kind, report, seconds: 20, stoppedBy: "file" });
+    expect(next).toMatch(/^Choose /);
+    expect(`${title} ${happened}`).not.toMatch(/reached|microphone|around you/);
+    expect(failureWords({ kind, report, seconds: 20, stoppedBy: "singer" }).next).toBe(report.nextStep);
+  },
+);

@@ -1,4 +1,5 @@
 import type { Failure, FailureKind, Interruption, StoppedBy } from "../recorder/recorder";
+import type { Verdict } from "@/shared/voice/takeReport";
 import type { Refusal, SoundKind } from "../recorder/sound/soundFile";
 
 export interface FailureWords {
@@ -119,6 +120,36 @@ const files: Record<Refusal, (file: SoundKind | null) => { happened: string; nex
   }),
 };
 
+/** The engine's refusals for a recording that somebody has: there is no microphone to come closer to. */
+const unheard: Record<Exclude<Verdict, "heard">, { title?: string; happened: string; next: string }> = {
+  "too-short": {
+    happened: "There is too little singing in this recording to tell.",
+    next: "Choose one with a whole verse, or with a few notes held for a second each.",
+  },
+  "too-quiet": {
+    happened: "There is hardly any sound in this recording.",
+    next: "Choose a louder one, recorded closer to the microphone.",
+  },
+  "too-noisy": {
+    title: "Too noisy to tell",
+    happened: "The voice in this recording cannot be heard apart from the noise.",
+    next: "Choose one from a quieter place.",
+  },
+  clipped: {
+    title: "Too loud to read",
+    happened: "This recording is so loud that its peaks are cut off.",
+    next: "Choose one that was recorded less loud.",
+  },
+  "not-singing": {
+    happened: "No singing was found in this recording.",
+    next: "Choose one of a voice that sings on its own, without an instrument.",
+  },
+  "several-voices": {
+    happened: "More than one voice or instrument was heard at once.",
+    next: "Choose one of a single voice without an instrument, so that the range is yours.",
+  },
+};
+
 function article(file: SoundKind): string {
   return file === "mp3" || file === "m4a" || file === "ogg" ? "an" : "a";
 }
@@ -137,6 +168,8 @@ export function failureWords({ kind, report, seconds, stoppedBy, file = null }: 
       next: mendWords(stoppedBy, "sing again"),
     };
   }
+  if (report && stoppedBy === "file" && kind in unheard)
+    return { title, ...unheard[kind as keyof typeof unheard], safe: nothingKept };
   if (report) return { title, happened: report.sentence, safe: nothingKept, next: report.nextStep };
   return {
     title,

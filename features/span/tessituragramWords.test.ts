@@ -45,4 +45,7 @@ test("a reach that was not sung yet is called an estimate, as on the keys' page"
     "Of the time 25 % in comfort, 75 % in reach.",
     "You have sung B♭3 to B♭4 so far; C5 is probably within reach (estimate).",
   ]);
+  expect(tessituragramWords(tunePlace(notes, "C", guessed)!, guessed, "sharps").at(-1)).toMatch(
+    /^You have sung B♭3 to B♭4/,
+  );
 });

@@ -79,9 +79,11 @@ export function tessituragramWords(
     ? bars.filter(({ midi, zone }) => zone === "reach" && (midi < heard.lowMidi || midi > heard.highMidi))
     : [];
   if (heard && guessed.length > 0) {
+    // The voice's own ends have one name wherever they are told, whatever the key.
+    const plain = (midi: number) => glyphs(noteName(midi));
     const notes = `${listWords(guessed.map(({ midi }) => say(midi)))} ${guessed.length === 1 ? "is" : "are"}`;
     words.push(
-      `You have sung ${say(heard.lowMidi)} to ${say(heard.highMidi)} so far; ${notes} probably within reach (estimate).`,
+      `You have sung ${plain(heard.lowMidi)} to ${plain(heard.highMidi)} so far; ${notes} probably within reach (estimate).`,
     );
   }
   const beyond = beyondWords(bars, voice, spelling);

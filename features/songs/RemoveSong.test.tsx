@@ -30,3 +30,15 @@ test("keeping the song gives the focus back", async () => {
   fireEvent.click(screen.getByText("Keep it"));
   await waitFor(() => expect(document.activeElement).toBe(screen.getByTestId("remove-song")));
 });
+
+test("Escape keeps the song, and the dialog that the question stands in", async () => {
+  const around = jest.fn();
+  document.addEventListener("keydown", around);
+  const onRemove = open();
+  expect(fireEvent.keyDown(screen.getByTestId("remove-confirmed"), { key: "Escape" })).toBe(false);
+  document.removeEventListener("keydown", around);
+  await waitFor(() => expect(document.activeElement).toBe(screen.getByTestId("remove-song")));
+  expect(screen.queryByTestId("remove-confirmed")).toBeNull();
+  expect(onRemove).not.toHaveBeenCalled();
+  expect(around).not.toHaveBeenCalled();
+});

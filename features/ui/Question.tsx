@@ -1,4 +1,4 @@
-import { useEffect, useRef } from "react";
+import { useEffect, useRef, type KeyboardEvent } from "react";
 import { View } from "react-native";
 import { Button } from "./Button";
 import { Notice } from "./Notice";
@@ -28,8 +28,15 @@ export function Question(props: QuestionProps) {
     // The foot of the phone stands over the end of the page: in the middle the whole question is seen.
     group.current?.scrollIntoView({ block: "center" });
   }, []);
+  const keepOnEscape = (event: KeyboardEvent) => {
+    if (event.key !== "Escape" || busy) return;
+    // Only the question goes, not the dialog that it stands in.
+    event.preventDefault();
+    event.stopPropagation();
+    onKeep();
+  };
   return (
-    <div ref={group} role="group" aria-label={question} tabIndex={-1}>
+    <div ref={group} role="group" aria-label={question} tabIndex={-1} onKeyDown={keepOnEscape}>
       <Notice kind="caution" title={question} testID="remove-asked">
         <Text variant="small">{text}</Text>
         {error && (

@@ -24,6 +24,7 @@ import { tryQueries } from "../tryout/tryQueries";
 import { decidedHere, decidedWords, type SongKeys } from "../useSongKeys";
 import { CompareTable } from "./CompareTable";
 import { compareTitle } from "./compareWords";
+import { keyToBegin } from "./keyToBegin";
 import { usePins } from "./pins";
 import { TakesTried } from "./TakesTried";
 import { takesIn } from "./takesWords";
@@ -48,7 +49,7 @@ export function CompareScreen({ song, keys, pending, voice, rows, instrument, wa
   const { setPins } = usePins(song.id);
   const tries = useQuery(tryQueries.all());
   const [chosen, setChosen] = useState<number | null>(null);
-  const selected = rows.find(({ shift }) => shift === chosen) ?? rows[0] ?? null;
+  const selected = keyToBegin(rows, chosen, keys.inHand?.because === "decided" ? keys.inHand.shift : null);
   const isMine = selected !== null && decidedHere(keys, selected.shift) !== null;
   const room = {
     phone: window - 2 * sizes.gutterPhone,

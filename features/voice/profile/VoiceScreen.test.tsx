@@ -51,6 +51,7 @@ it("tells a first comer what this will be and the one next step", async () => {
   open();
   const empty = await screen.findByTestId("voice-empty");
   expect(within(empty).getByTestId("voice-sing").getAttribute("href")).toBe("/voice/sing");
+  expect(within(empty).getByTestId("voice-upload").getAttribute("href")).toBe("/voice/upload");
 });
 
 it("shows the voice from its takes, and without an erased take after asking once more", async () => {

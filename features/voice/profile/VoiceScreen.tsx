@@ -74,6 +74,7 @@ function NoVoiceYet() {
               href="/voice/guided"
               testID="voice-guided"
             />
+            <LinkButton kind="text" label="Use a recording" href="/voice/upload" testID="voice-upload" />
             <LinkButton kind="text" label="Set notes by hand" href="/voice/by-hand" testID="voice-by-hand" />
           </View>
         }

@@ -47,6 +47,17 @@ test("an instrument from nothing: errors in place, then kept as it was typed", a
   expect(own!.strings.map(({ note }) => note)).toEqual(["D4", "A3", "F#4"]);
 });
 
+test("while the neck cannot be drawn, it is said what is missing for it", () => {
+  show(<NewInstrument from="banjo" onKept={() => undefined} />);
+  expect(screen.queryByText(/the neck is drawn and can be heard here/)).toBeNull();
+  type("scale", "-5");
+  expect(screen.getByText(/Scale or frets cannot be read yet/)).toBeTruthy();
+  type("scale", "660");
+  expect(screen.queryByText(/cannot be read yet/)).toBeNull();
+  for (const k of [0, 1, 2, 3, 4]) type(`note-${k}`, "");
+  expect(screen.getByText(/Name the note of a string/)).toBeTruthy();
+});
+
 test("what was typed outlives a reload, and can be let go", async () => {
   const first = show(<NewInstrument from="banjo" onKept={() => undefined} />);
   type("instrument-name", "Slipway banjo");

@@ -12,7 +12,7 @@ import { HearStrings } from "../sound/HearStrings";
 import { mostStrings, newString, type InstrumentDraft, type StringDraft } from "./instrumentDraft";
 import { NeckFields } from "./NeckFields";
 import { PhotoField } from "./photo/PhotoField";
-import { sketchOf, type DraftErrors } from "./readDraft";
+import { readNote, sketchOf, type DraftErrors } from "./readDraft";
 import { StringFields } from "./StringFields";
 
 export interface InstrumentFormProps {
@@ -104,6 +104,7 @@ export function InstrumentForm({ draft, errors, onChange }: InstrumentFormProps)
 /** The instrument as far as it is known. */
 function Sketch({ draft }: { draft: InstrumentDraft }) {
   const [sounding, setSounding] = useState<number | null>(null);
+  const { strings } = draft;
   const sketch = sketchOf(draft);
   return (
     <View style={{ gap: 12 }}>
@@ -115,7 +116,9 @@ function Sketch({ draft }: { draft: InstrumentDraft }) {
         </>
       ) : (
         <Text variant="small" tone="soft">
-          Name the note of a string, and the neck is drawn and can be heard here.
+          {strings.some(({ note }) => readNote(note) !== null)
+            ? "Scale or frets cannot be read yet. Once they can, the neck is drawn and can be heard here."
+            : "Name the note of a string, and the neck is drawn and can be heard here."}
         </Text>
       )}
     </View>

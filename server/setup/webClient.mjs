@@ -4,14 +4,20 @@ import { createHash } from "node:crypto";
 import fs from "node:fs";
 import path from "node:path";
 import zlib from "node:zlib";
+import { nameByContent } from "./chunkNames.mjs";
 import { locked } from "./postgres.mjs";
 
 const sources = ["app", "features", "shared", "assets", "fonts", "public"];
 const configs = ["package-lock.json", "app.json", "metro.config.js", "babel.config.js", "tsconfig.json"];
 /** Made by metro.config.js from the sources. */
-const made = ["takeWorker.js", "guidedWorker.js", "tunerWorker.js", "songFileWorker.js", "wayWorker.js", "pupilsWorker.js"].map((file) =>
-  path.join("public", "worklets", file),
-);
+const made = [
+  "takeWorker.js",
+  "guidedWorker.js",
+  "tunerWorker.js",
+  "songFileWorker.js",
+  "wayWorker.js",
+  "pupilsWorker.js",
+].map((file) => path.join("public", "worklets", file));
 const packed = /\.(js|css|html|svg|json|map|txt|webmanifest)$/;
 
 /** Exports the client unless dist/ was built from the very same sources; returns the folder. */
@@ -44,6 +50,7 @@ export async function ensureWebClient({ root, say }) {
       },
     );
     if (run.status !== 0) throw new Error(`The web client could not be built:\n${run.stdout}${run.stderr}`);
+    nameByContent(next);
     for (const file of walk(next).filter((name) => packed.test(name))) pack(path.join(next, file));
     fs.writeFileSync(path.join(next, ".built-from"), wanted);
     fs.rmSync(dist, { recursive: true, force: true });
@@ -64,6 +71,7 @@ function fingerprint(root) {
   const hash = createHash("sha256");
   const files = [
     ...configs,
+    path.join("server", "setup", "chunkNames.mjs"),
     ...sources.flatMap((dir) => walk(path.join(root, dir)).map((file) => path.join(dir, file))),
   ];
   for (const file of files.filter((name) => !made.includes(name) && !/\.test\.tsx?$/.test(name)).sort()) {

@@ -11,7 +11,7 @@ export function isMissingChunk(error: unknown): boolean {
   if (!(error instanceof Error)) return false;
   return (
     error.name === "AsyncRequireError" ||
-    /loading (module|chunk|bundle)|dynamically imported module|load split bundle/i.test(error.message)
+    /loading (module|chunk|bundle)|dynamically imported module|load split bundle|unknown module/i.test(error.message)
   );
 }
 

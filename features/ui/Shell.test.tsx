@@ -235,6 +235,8 @@ describe("what breaks below the shell", () => {
     missing.name = "AsyncRequireError";
     expect(isMissingChunk(missing)).toBe(true);
     expect(isMissingChunk(new Error("Failed to fetch dynamically imported module"))).toBe(true);
+    // A page of the new version asks the old program for what it does not have.
+    expect(isMissingChunk(new Error('Requiring unknown module "1204".'))).toBe(true);
     expect(isMissingChunk(new Error("x is not a function"))).toBe(false);
     expect(isMissingChunk("text")).toBe(false);
   });

@@ -36,12 +36,14 @@ export function clippedShare(pcm: Float32Array): number {
   const ceiling = (top > -bottom ? top : -bottom) * 0.995;
   let clipped = 0;
   let run = 0;
-  for (let i = 0; i <= pcm.length; i++) {
-    if (i < pcm.length && (pcm[i]! >= ceiling || pcm[i]! <= -ceiling)) run++;
-    else {
+  for (let i = 0; i < pcm.length; i++) {
+    const x = pcm[i]!;
+    if (x >= ceiling || x <= -ceiling) run++;
+    else if (run > 0) {
       if (run >= 3) clipped += run;
       run = 0;
     }
   }
+  if (run >= 3) clipped += run;
   return clipped / pcm.length;
 }

@@ -30,7 +30,7 @@ export function harmonicPresence(r: Float32Array, hz: number, enclosed = false):
   const count = Math.min(MOST_HARMONICS, Math.floor(HIGHEST_HARMONIC_HZ / hz));
   if (count < 3 || !(r[0]! > 0)) return 1;
   const power = new Float32Array(count + 2);
-  for (let h = 1; h <= count; h++) power[h] = Math.max(0, powerAt(r, h * hz));
+  for (let h = 1; h <= count; h += 4) fourPowers(r, hz, h, count, power);
   const least = LEAST_SHARE * MAX_LAG * 0.5 * Math.max(0, r[0]!);
   let presence = 1;
   for (const every of [2, 3, 5, 7]) {
@@ -38,6 +38,48 @@ export function harmonicPresence(r: Float32Array, hz: number, enclosed = false):
     if (several) presence = Math.min(presence, between(power, count, every, least, enclosed));
   }
   return presence;
+}
+
+/**
+ * What `powerAt` says of harmonic h and the three above it as far as there are, never below 0. Four at once: each sum
+ * waits for its own cosine only, so a processor works on all of them side by side.
+ */
+function fourPowers(r: Float32Array, hz: number, h: number, count: number, power: Float32Array): void {
+  const turn = (2 * Math.PI * hz) / ANALYSIS_RATE;
+  const [step0, step1] = [2 * Math.cos(turn * h), 2 * Math.cos(turn * (h + 1))];
+  const [step2, step3] = [2 * Math.cos(turn * (h + 2)), 2 * Math.cos(turn * (h + 3))];
+  let [before0, before1, before2, before3] = [step0 / 2, step1 / 2, step2 / 2, step3 / 2];
+  let [now0, now1, now2, now3] = [1, 1, 1, 1];
+  let [sum0, sum1, sum2, sum3] = [0, 0, 0, 0];
+  for (let lag = 0; lag <= lastLag; lag++) {
+    const weighed = lagWindow[lag]! * r[lag]!;
+    sum0 += weighed * now0;
+    sum1 += weighed * now1;
+    sum2 += weighed * now2;
+    sum3 += weighed * now3;
+    const next0 = step0 * now0 - before0;
+    const next1 = step1 * now1 - before1;
+    const next2 = step2 * now2 - before2;
+    const next3 = step3 * now3 - before3;
+    before0 = now0;
+    before1 = now1;
+    before2 = now2;
+    before3 = now3;
+    now0 = next0;
+    now1 = next1;
+    now2 = next2;
+    now3 = next3;
+  }
+  power[h] = Math.max(0, sum0);
+  if (h + 1 <= count) power[h + 1] = Math.max(0, sum1);
+  if (h + 2 <= count) power[h + 2] = Math.max(0, sum2);
+  if (h + 3 <= count) power[h + 3] = Math.max(0, sum3);
+}
+
+/** Geometric mean of two powers, `share` of the way from the first to the second. */
+function onTheWay(from: number, to: number, share: number): number {
+  if (share === 0.5) return Math.sqrt(from * to);
+  return from > 0 ? from * (to / from) ** share : 0;
 }
 
 /**
@@ -53,8 +95,7 @@ function between(power: Float32Array, count: number, every: number, least: numbe
     const below = power[h - (h % every)]!;
     const above = h - (h % every) + every <= count ? power[h - (h % every) + every]! : below;
     const share = (h % every) / every;
-    const expected =
-      h < every ? above : Math.max(below, 1e-3 * above) ** (1 - share) * Math.max(above, 1e-3 * below) ** share;
+    const expected = h < every ? above : onTheWay(Math.max(below, 1e-3 * above), Math.max(above, 1e-3 * below), share);
     if (expected < least && power[h]! < least) continue;
     const trust = h < every ? 0.5 : 1;
     sum += trust * Math.min(1, Math.sqrt(power[h]! / Math.max(expected, 1e-30)));

@@ -69,7 +69,7 @@ export function findCandidates(frame: LagFrame, room: RoomFloor, short: () => La
   const loudEnough = aboveRoomDb > 3 && frame.levelDb > DIGITAL_SILENCE_DB;
   const candidates =
     clearest < CLEAR_ENOUGH && loudEnough ? joined(long, peaks(cleanedDifference(short(), room, SHORT_WINDOW))) : long;
-  const r = new Float32Array(lastLag + 1);
+  const r = withoutRoom;
   for (let lag = 0; lag <= lastLag; lag++) r[lag] = frame.r[lag]! - room.r[lag]!;
   out.candidates = candidates.map((c) =>
     hasShorter(c, candidates) ? { ...c, presence: harmonicPresence(r, c.hz) } : { ...c },
@@ -132,9 +132,13 @@ function rank(candidate: PitchCandidate): number {
   return candidate.clarity + 0.005 * candidate.midi;
 }
 
+/** Written anew for every frame and read before the next: memory for each one would cost more than all the sums. */
+const difference = new Float32Array(lastLag + 1);
+const withoutRoom = new Float32Array(lastLag + 1);
+
 /** The room's share of a window scales with the overlap at each lag. */
 function cleanedDifference(frame: LagFrame, room: RoomFloor, length: number): Float32Array {
-  const n = new Float32Array(lastLag + 1);
+  const n = difference;
   const { r, m } = frame;
   const { r: roomR, m: roomM } = room;
   const least = LEAST_OVERLAP * m[0]!;

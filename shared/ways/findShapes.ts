@@ -12,8 +12,9 @@ import type { Shape } from "./way";
  * Every playable fingering of a chord on an instrument, all the way up the neck.
  *
  * Root and third sound (in suspended chords what stands for the third), at most four fingers, no silent string between
- * sounding ones, reach by millimetres. A short string sounds open or not at all. With a capo, a short string is taken to
- * be stopped as many frets up as the others.
+ * sounding ones, reach by millimetres; where the neck has no such fingering, the looser ones of `ShapeOptions.all` are
+ * taken: three strings may hold no whole triad. A short string sounds open or not at all. With a capo, a short string is
+ * taken to be stopped as many frets up as the others.
  *
  * @param chord a parsed chord; a bass behind a slash is put lowest
  * @param instrument tuning, scale and frets

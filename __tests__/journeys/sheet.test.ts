@@ -138,6 +138,7 @@ test("a stranger opens a shared sheet, moves it to a ukulele, and finds it ended
   await stranger.page.getByTestId("sheet-reading").waitFor();
 
   await owner.page.getByTestId("end-link").click();
+  await owner.page.getByTestId("remove-confirmed").click();
   await owner.page.getByText(/Ended by you/).waitFor();
   const answer = await stranger.page.goto(address);
   expect(answer?.status()).toBe(410);

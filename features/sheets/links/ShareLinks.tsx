@@ -2,6 +2,7 @@ import { useQuery } from "@tanstack/react-query";
 import { useState } from "react";
 import { View } from "react-native";
 import { useSession } from "@/features/api/SessionProvider";
+import { AskedTwice } from "@/features/ui/AskedTwice";
 import { Button } from "@/features/ui/Button";
 import { Field } from "@/features/ui/Field";
 import { Form } from "@/features/ui/Form";
@@ -125,52 +126,54 @@ function Maker({ songId, view }: ShareLinksProps) {
 }
 
 function Links({ links }: { links: readonly SheetLink[] }) {
-  const revoke = useRevokeLink();
   const now = new Date().toISOString();
   return (
     <View testID="links">
-      {revoke.error && (
-        <Notice kind="error" title="The link still works">
-          {revoke.error.message}
-        </Notice>
+      {links.map((link) => (
+        <LinkRow key={link.id} link={link} {...linkState(link, now)} />
+      ))}
+    </View>
+  );
+}
+
+function LinkRow({ link, live, words }: { link: SheetLink; live: boolean; words: string }) {
+  const revoke = useRevokeLink();
+  const name = link.label === "" ? "Link without a name" : link.label;
+  return (
+    <View
+      style={{
+        flexDirection: "row",
+        flexWrap: "wrap",
+        alignItems: "center",
+        justifyContent: "space-between",
+        gap: 8,
+        borderTopWidth: 1,
+        borderColor: colors.line,
+        minHeight: 56,
+        paddingVertical: 4,
+      }}
+    >
+      <View style={{ flexShrink: 1 }}>
+        <Text variant="label">{name}</Text>
+        <Text variant="tiny" tone="soft">
+          {words}
+        </Text>
+      </View>
+      {live && (
+        <AskedTwice
+          label="End"
+          accessibleName={`End the link: ${name}`}
+          question={`End “${name}”?`}
+          text="Whoever has it no longer gets in, and this address does not come back. You can make another link."
+          failed="The link still works."
+          icon={null}
+          confirmLabel="End it"
+          onRemove={() => revoke.mutate(link)}
+          busy={revoke.isPending}
+          error={revoke.error}
+          testID="end-link"
+        />
       )}
-      {links.map((link) => {
-        const { live, words } = linkState(link, now);
-        const name = link.label === "" ? "Link without a name" : link.label;
-        return (
-          <View
-            key={link.id}
-            style={{
-              flexDirection: "row",
-              alignItems: "center",
-              justifyContent: "space-between",
-              gap: 8,
-              borderTopWidth: 1,
-              borderColor: colors.line,
-              minHeight: 56,
-              paddingVertical: 4,
-            }}
-          >
-            <View style={{ flexShrink: 1 }}>
-              <Text variant="label">{name}</Text>
-              <Text variant="tiny" tone="soft">
-                {words}
-              </Text>
-            </View>
-            {live && (
-              <Button
-                kind="text"
-                small
-                label="End"
-                accessibleName={`End the link: ${name}`}
-                busy={revoke.isPending && revoke.variables.id === link.id}
-                onPress={() => revoke.mutate(link)}
-                testID="end-link"
-              />
-            )}
-          </View>
-        );
-      })}
     </View>
   );
 }

@@ -5,8 +5,8 @@ import os from "node:os";
 import path from "node:path";
 import { ensureWebClient } from "./webClient.mjs";
 
-/** More failed files than this are no matter of load. */
-const mostAskedAgain = 4;
+/** More failed files than this, of the thirty and more that share two cores, are no matter of load. */
+const mostAskedAgain = 6;
 
 /** Runs every check (or only those named) and prints the closing line; returns the exit code. */
 export async function runChecks({ root, say, databaseUrl, only }) {

@@ -19,13 +19,12 @@ const swc = (importInterop) => [
 /** Packages that come as ES modules only. */
 const modules = [
   ...["pitchy", "fft\\.js", "@tus", "srvx", "file-type", "strtok3", "token-types", "@tokenizer", "@borewit"],
-  ...["uint8array-extras", "set-cookie-parser", "music-metadata", "media-typer", "win-guid"],
+  ...["uint8array-extras", "set-cookie-parser"],
 ];
 const node = {
   testEnvironment: "node",
   // Their entries bear names ("import", "module-sync") that Node knows and Jest's require does not.
   moduleNameMapper: {
-    "^music-metadata$": "<rootDir>/node_modules/music-metadata/lib/index.js",
     "^file-type$": "file-type/node",
     ...alias,
   },

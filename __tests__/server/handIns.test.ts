@@ -168,8 +168,10 @@ describe("sending", () => {
     expect(server.smtp.mails.filter(({ to }) => to === place.teacher.email)).toHaveLength(1);
   });
 
-  it("looks at the bytes and deletes what is no sound, whatever it was called", async () => {
-    const page = Buffer.from("<!doctype html><script>alert(1)</script>".padEnd(2000));
+  it.each([
+    ["a page", Buffer.from("<!doctype html><script>alert(1)</script>".padEnd(2000))],
+    ["a recording's head over nothing that sounds", Buffer.from("fLaC".padEnd(2000))],
+  ])("looks at the bytes and deletes %s, whatever it was called", async (_what, page) => {
     const asked = await announced(page.length);
     const key = await storageKeyOf(server, asked.id);
     const { body } = await place.pupil.patch(`/api/uploads/${asked.id}`, page).set(from(0)).buffer(true).expect(422);

@@ -118,9 +118,9 @@ export class HandInsService {
     const size = await this.objects.size(key);
     const sound = size === null || size > mostTakeBytes ? null : await this.objects.read(key);
     const mediaType = sound && (await soundType(sound.subarray(0, tellingBytes)));
-    if (!sound || !mediaType) throw await this.refused(key, notSound());
-    const durationS = await soundDuration(sound, mediaType);
-    if (durationS !== null && durationS > mostTakeS + paddedS) throw await this.refused(key, lastsTooLong());
+    const durationS = sound && mediaType && (await soundDuration(sound));
+    if (!durationS) throw await this.refused(key, notSound());
+    if (durationS > mostTakeS + paddedS) throw await this.refused(key, lastsTooLong());
     await this.dataSource.transaction(async (manager) => {
       const [rows]: [{ id: string; partId: string; kind: string; userId: string }[], number] = await manager.query(
         `UPDATE hand_ins h SET state = 'ready', ready_at = now(), media_type = $2, bytes = $3 FROM studio_members m

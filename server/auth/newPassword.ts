@@ -1,18 +1,16 @@
-import { dictionary } from "@zxcvbn-ts/language-common";
 import { HttpProblem } from "../http/httpProblem";
+import { isCommonPassword } from "./commonPasswords";
 
-const common = new Set(dictionary["passwords-common"]);
 const plain = (text: string) => text.normalize("NFKC").toLowerCase();
 
 /** Refuses passwords that are tried first by those who guess: from lists, made of one's own address, or of one thing again and again. */
 export function refuseCommonPassword(password: string, email: string, field = "password"): void {
   const words = plain(password);
-  const core = words.replace(/[\d\W_]+$/u, "");
   const [name = ""] = plain(email).split("@");
   const own = [plain(email), "larkspan", ...(name.length >= 4 ? [name] : [])];
   const rest = own.reduce((left, word) => left.replaceAll(word, ""), words);
   const isRepeated = /^(.{1,4})\1+.{0,3}$/su.test(words);
-  if (common.has(words) || (core.length > 0 && common.has(core)) || rest.length < 6 || isRepeated) {
+  if (isCommonPassword(words) || rest.length < 6 || isRepeated) {
     const message =
       "This password is easy to guess: it is on lists of common ones, or made of your address. Choose another.";
     throw new HttpProblem(422, "invalid", message, [{ path: field, message }]);

@@ -7,9 +7,26 @@ export type Viewport = keyof typeof viewports;
 /** What the browser hears: a wav file, nothing plugged in, or a person who refuses. */
 export type Microphone = { wav: string } | "none" | "refused";
 
+/**
+ * What Chromium shall leave out. Its address bar is a page of its own for every window, which nobody sees here and which took
+ * half of the processor; the rest is what Playwright leaves out, for the browser heeds only the last list.
+ */
+const without = [
+  ...["PreloadTopChromeWebUI", "WebUIOmniboxPopup", "WebUIOmniboxAimPopup", "WebUIOmniboxFullPopup", "AimEnabled"],
+  ...["AvoidUnnecessaryBeforeUnloadCheckSync", "DestroyProfileOnBrowserClose", "HttpsUpgrades"],
+  ...[
+    "HttpsFirstBalancedModeAutoEnable",
+    "LensOverlay",
+    "MediaRouter",
+    "PaintHolding",
+    "ThirdPartyStoragePartitioning",
+  ],
+  ...["AvoidCorsURLLoaderRestartOnRedirect", "OptimizationHints", "NetworkTimeServiceQuerying", "PreconnectToSearch"],
+];
 const quiet = [
   ...["--no-sandbox", "--disable-gpu", "--disable-quic", "--no-first-run", "--disable-background-networking"],
   ...["--disable-component-update", "--disable-sync", "--autoplay-policy=no-user-gesture-required"],
+  `--disable-features=${without.join(",")}`,
 ];
 
 /** Debian's Chromium with the given microphone. The wav is played once, from the moment the page asks for the microphone. */

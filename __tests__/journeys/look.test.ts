@@ -1,14 +1,14 @@
 import type { Page } from "playwright-core";
 import type { Viewport } from "./browser";
-import { screenFaults, scrollsSideways } from "./screenFaults";
+import { faultsInEveryLook, type Screen } from "./screenFaults";
 import { signInAsMaren } from "./signIn";
 import { setStage } from "./stage";
 
 const stage = setStage("kept");
 
 /** A profile signed in as one of the demonstration's singers, who has a voice, songs and decided keys. */
-async function asMaren(viewport: Viewport, colorScheme: "light" | "dark") {
-  const profile = await stage.open("none", viewport, colorScheme);
+async function asMaren(viewport: Viewport) {
+  const profile = await stage.open("none", viewport);
   const { page } = profile;
   await signInAsMaren(page, "/songs");
   await page.getByText("Lantern on the Slipway").waitFor();
@@ -20,8 +20,8 @@ async function asMaren(viewport: Viewport, colorScheme: "light" | "dark") {
   return { ...profile, ferry: ferry.id };
 }
 
-/** Every screen with something on it, and how one knows that it is all there. */
-function screens(ferry: string): [path: string, ready: (page: Page) => Promise<unknown>][] {
+/** Every screen with something on it. */
+function screens(ferry: string): Screen[] {
   const heading = (page: Page) => page.getByRole("heading", { level: 1 }).first().waitFor();
   return [
     ["/", heading],
@@ -50,7 +50,7 @@ function screens(ferry: string): [path: string, ready: (page: Page) => Promise<u
 }
 
 /** The same product before anything was done in it. */
-const strangersScreens: [path: string, ready: (page: Page) => Promise<unknown>][] = [
+const strangersScreens: Screen[] = [
   ["/voice", (page) => page.getByRole("link", { name: "Sing a few seconds" }).waitFor()],
   ["/songs", (page) => page.getByText("Lantern on the Slipway").waitFor()],
   ["/account", (page) => page.getByTestId("to-sign-up").waitFor()],
@@ -58,48 +58,22 @@ const strangersScreens: [path: string, ready: (page: Page) => Promise<unknown>][
   ["/account/sign-up", (page) => page.getByTestId("email").waitFor()],
 ];
 
-describe.each([
-  ["phone", "light"],
-  ["phone", "dark"],
-  ["wide", "light"],
-  ["wide", "dark"],
-] as const)("every screen on the %s in %s colours", (viewport, scheme) => {
-  test("is accessible, throws nothing and does not scroll sideways", async () => {
-    const stranger = await stage.open("none", viewport, scheme);
-    const singer = await asMaren(viewport, scheme);
-    const findings: Record<string, string[]> = {};
-    const look = async (page: Page, who: string, list: typeof strangersScreens) => {
-      for (const [path, ready] of list) {
-        await page.goto(path);
-        await ready(page);
-        const said = await screenFaults(page);
-        if (said.length > 0) findings[`${who} at ${path}`] = said;
-      }
-    };
-    await look(stranger.page, "stranger", strangersScreens);
-    await look(singer.page, "singer", screens(singer.ferry));
-    expect(findings).toEqual({});
-    expect([...stranger.errors, ...singer.errors]).toEqual([]);
-    await stranger.context.close();
-    await singer.context.close();
-  }, 180_000);
-});
-
-test("no screen scrolls sideways on 320 px", async () => {
-  const { context, page, ferry } = await asMaren("phone", "light");
-  await page.setViewportSize({ width: 320, height: 640 });
-  const wider: string[] = [];
-  for (const [path, ready] of screens(ferry)) {
-    await page.goto(path);
-    await ready(page);
-    if (await scrollsSideways(page)) wider.push(path);
-  }
-  expect(wider).toEqual([]);
+test("every screen of a stranger is accessible, throws nothing and does not scroll sideways, in every look", async () => {
+  const { page, errors, context } = await stage.open("none");
+  expect(await faultsInEveryLook(page, strangersScreens)).toEqual({});
+  expect(errors).toEqual([]);
   await context.close();
-}, 120_000);
+}, 180_000);
+
+test("every screen of a singer is accessible, throws nothing and does not scroll sideways, in every look", async () => {
+  const { page, errors, context, ferry } = await asMaren("phone");
+  expect(await faultsInEveryLook(page, screens(ferry))).toEqual({});
+  expect(errors).toEqual([]);
+  await context.close();
+}, 300_000);
 
 test("♯ and ♭ are drawn from the shipped music font, in text and in charts", async () => {
-  const { context, page, ferry } = await asMaren("wide", "light");
+  const { context, page, ferry } = await asMaren("wide");
   await page.goto(`/songs/${ferry}/keys`);
   await page.getByRole("table").getByText("♭").first().waitFor();
   const session = await context.newCDPSession(page);

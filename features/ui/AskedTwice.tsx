@@ -19,6 +19,8 @@ export interface AskedTwiceProps {
   /** "Delete it" and "Keep it" unless something else is asked */
   confirmLabel?: string;
   keepLabel?: string;
+  /** where it stands under text, so that its own edge is the text's */
+  flush?: boolean;
   /** what asks, where it is no plain button */
   opener?: (ask: () => void) => ReactNode;
   onRemove: () => void;
@@ -38,6 +40,7 @@ export function AskedTwice({
   icon = "trash",
   confirmLabel = "Delete it",
   keepLabel = "Keep it",
+  flush = false,
   opener: shownOpener,
   onRemove,
   busy,
@@ -52,7 +55,7 @@ export function AskedTwice({
   };
   if (!asked)
     return (
-      <div ref={opener}>
+      <div ref={opener} style={flush ? { alignSelf: "flex-start", marginLeft: -8 } : undefined}>
         {shownOpener ? (
           shownOpener(() => setAsked(true))
         ) : (

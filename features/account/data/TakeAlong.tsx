@@ -20,7 +20,8 @@ export function TakeAlong() {
     <Card style={{ gap: 12 }}>
       <Heading level={2}>Take everything along</Heading>
       <Text variant="small" tone="soft">
-        One zip file with all that is in your account: as JSON for programs, the charts as text for reading.
+        One zip file with all that is in your account: as JSON for programs, the charts as text for reading, what you
+        handed in as sound.
       </Text>
       {take.error && (
         <Notice kind="error" title="The file could not be made">

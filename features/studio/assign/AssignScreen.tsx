@@ -45,6 +45,12 @@ export function AssignScreen(props: AssignScreenProps) {
       <View style={{ maxWidth: 560 }}>
         <SongSelect songs={songs} songId={songId} onSong={onSong} testID="assign-song" />
       </View>
+      {songId === null && (
+        <Text tone="soft" style={{ maxWidth: 560 }}>
+          Each pupil is offered a key and a way from their own voice and instrument. You change what you like before
+          anything is sent.
+        </Text>
+      )}
       {songId !== null && piece === null && (
         <Notice kind="caution">
           This song has no key yet. Open it and say in which key it is written; then it can be given.

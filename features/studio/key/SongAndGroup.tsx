@@ -1,6 +1,7 @@
 import { View } from "react-native";
 import { Notice } from "@/features/ui/Notice";
 import { Select } from "@/features/ui/Select";
+import { Text } from "@/features/ui/Text";
 import { useLayout } from "@/features/ui/useLayout";
 import type { StudioGroup } from "@/shared/contract/studio/group";
 import type { Piece } from "../judge/piece";
@@ -34,6 +35,12 @@ export function SongAndGroup({ songs, songId, onSong, piece, groups, groupId, on
           />
         </View>
       </View>
+      {songId === null && (
+        <Text tone="soft" style={{ maxWidth: 560 }}>
+          Every key is held against every voice that sings. The fairest is the one in which the worst-off singer sings
+          best.
+        </Text>
+      )}
       {songId !== null && piece === null && (
         <Notice kind="caution">This song has no key yet. Open it and say in which key it is written.</Notice>
       )}

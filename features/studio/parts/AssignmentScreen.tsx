@@ -53,6 +53,7 @@ function Opened({ studio, assignment, now }: { studio: Studio; assignment: Assig
       <PartsTable parts={parts} now={now} />
       <ChangeAssignment path={path} dueOn={dueOn} note={note} />
       <AskedTwice
+        flush
         label="Take the song back"
         question={`Take “${title}” back from all of them?`}
         text="Their threads and the takes handed in are deleted. The copies on their own shelves stay theirs."

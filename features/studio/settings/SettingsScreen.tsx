@@ -95,6 +95,7 @@ function DeleteStudio({ studio }: { studio: Studio }) {
         voices and their songs.
       </Text>
       <AskedTwice
+        flush
         label="Delete the studio"
         question={`Delete “${studio.name}”?`}
         text="It goes for everybody in it, with all recordings, and does not come back."
@@ -117,6 +118,7 @@ export function LeaveStudio({ studio }: { studio: Studio }) {
   });
   return (
     <AskedTwice
+      flush
       icon={null}
       label="Leave the studio"
       question={`Leave “${studio.name}”?`}

@@ -57,8 +57,18 @@ module.exports = {
     layer("coach", "signal", "music", "voice", "songs", "keys", "instruments", "ways"),
     layer("sheets", "signal", "music", "voice", "songs", "keys", "instruments", "ways"),
     only("ui-sees-shared", "The kit of parts knows no feature.", "^features/ui/", "^(features/ui|shared)/"),
-    only("api-sees-shared", "The client's way to the server knows no feature.", "^features/api/", "^(features/api|shared)/"),
-    only("span-sees-ui", "The span pictures stand on the kit alone.", "^features/span/", "^(features/(span|ui)|shared)/"),
+    only(
+      "api-sees-shared",
+      "The client's way to the server knows no feature.",
+      "^features/api/",
+      "^(features/api|shared)/",
+    ),
+    only(
+      "span-sees-ui",
+      "The span pictures stand on the kit alone.",
+      "^features/span/",
+      "^(features/(span|ui)|shared)/",
+    ),
     only(
       "features-stay-apart",
       "Where two features meet, the route passes one's result to the other.",
@@ -81,13 +91,22 @@ module.exports = {
       from: { path: "^server/http/", pathNot: test },
       to: { path: domain },
     },
-    { name: "no-cycle", comment: "No file depends on itself by a detour.", severity: "error", from: {}, to: { circular: true } },
+    {
+      name: "no-cycle",
+      comment: "No file depends on itself by a detour.",
+      severity: "error",
+      from: {},
+      to: { circular: true },
+    },
   ],
   options: {
     doNotFollow: { path: "node_modules" },
     exclude: { path: "^(dist|build|\\.expo)/" },
     tsPreCompilationDeps: true,
     tsConfig: { fileName: "tsconfig.json" },
-    enhancedResolveOptions: { exportsFields: ["exports"], conditionNames: ["import", "require", "node", "default", "types"] },
+    enhancedResolveOptions: {
+      exportsFields: ["exports"],
+      conditionNames: ["import", "require", "node", "default", "types"],
+    },
   },
 };

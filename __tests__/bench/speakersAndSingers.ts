@@ -95,7 +95,8 @@ export function singer(seed: number): Utterance {
   const loose = manner < 0.6;
   const kind = pick(KINDS, random);
   const body = makeBody(voice, random);
-  if (random.next() < 0.15) Object.assign(body, { breathDb: random.between(-16, -8), tilt: random.between(1.5, 1.9), firstDb: 6 });
+  if (random.next() < 0.15)
+    Object.assign(body, { breathDb: random.between(-16, -8), tilt: random.between(1.5, 1.9), firstDb: 6 });
   const delivery = makeDelivery(random);
   delivery.scoopCents = random.next() < 0.4 ? random.between(100, 300) : random.between(0, 60);
   delivery.driftCents = random.between(4, 22);

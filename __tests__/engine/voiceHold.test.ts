@@ -16,10 +16,22 @@ function held(voice: VoiceName, midis: readonly number[], lengthS: number, seed:
   if (steady) Object.assign(delivery, { driftCents: 2, scoopCents: 0 });
   const notes = midis.map((midi, k): LineNote => {
     const start = 0.4 + k * (lengthS + 0.5);
-    return { midi, start, end: start + lengthS, onset: "open", vowel: (["a", "u", "i", "o"] as const)[(k + seed) % 4]!, levelDb: 0 };
+    return {
+      midi,
+      start,
+      end: start + lengthS,
+      onset: "open",
+      vowel: (["a", "u", "i", "o"] as const)[(k + seed) % 4]!,
+      levelDb: 0,
+    };
   });
   const durationS = 0.4 + midis.length * (lengthS + 0.5);
-  return addNoise(soundLine(notes, pitchCurve(notes, delivery, durationS, random), body, durationS, rate, random), rate, 40, random);
+  return addNoise(
+    soundLine(notes, pitchCurve(notes, delivery, durationS, random), body, durationS, rate, random),
+    rate,
+    40,
+    random,
+  );
 }
 
 const judge = (pcm: Float32Array) => listenToTake(pcm, rate, { hold: true });
@@ -37,7 +49,8 @@ test.each(voices)("%s: one note of 0.6 s is heard at both ends and in the middle
 
 test.each(voices)("%s: who holds a note as well as anybody can is still heard", (voice) => {
   const { low, high } = VOICES[voice];
-  for (const seed of [1, 2, 3]) expect(judge(held(voice, [low + (high - low) * 0.25 * seed], 1.8, seed, true)).verdict).toBe("heard");
+  for (const seed of [1, 2, 3])
+    expect(judge(held(voice, [low + (high - low) * 0.25 * seed], 1.8, seed, true)).verdict).toBe("heard");
 });
 
 test("several held notes give the lowest and the highest", () => {
@@ -70,17 +83,28 @@ test.each([
   expect(judge(addNoise(tone, rate, snrDb, createRandom(3))).verdict).toBe("not-singing");
 });
 
-test.each([[220, 40], [440, 10], [880, 12]])("nor is one that sounds four times (%d Hz, %d dB over the noise)", (hz, snrDb) => {
+test.each([
+  [220, 40],
+  [440, 10],
+  [880, 12],
+])("nor is one that sounds four times (%d Hz, %d dB over the noise)", (hz, snrDb) => {
   const [onS, everyS] = [0.8, 1.2];
   const tone = Float32Array.from({ length: rate * 5 }, (_, i) => {
     const t = (i / rate) % everyS;
-    return 0.1 * Math.max(0, Math.min(1, t / 0.01, (onS - t) / 0.01)) * (Math.sin(2 * Math.PI * hz * t) + 0.3 * Math.sin(6 * Math.PI * hz * t));
+    return (
+      0.1 *
+      Math.max(0, Math.min(1, t / 0.01, (onS - t) / 0.01)) *
+      (Math.sin(2 * Math.PI * hz * t) + 0.3 * Math.sin(6 * Math.PI * hz * t))
+    );
   });
   expect(judge(addNoise(tone, rate, snrDb, createRandom(4))).verdict).toBe("not-singing");
 });
 
-test.each(["bass", "alto", "soprano"] as const)("%s: held as well as can be in that noise, a note is heard", (voice) => {
-  const { low, high } = VOICES[voice];
-  const pcm = held(voice, [(low + high) / 2], 1.2, 6, true);
-  for (const snrDb of [10, 12]) expect(judge(addNoise(pcm, rate, snrDb, createRandom(5))).verdict).toBe("heard");
-});
+test.each(["bass", "alto", "soprano"] as const)(
+  "%s: held as well as can be in that noise, a note is heard",
+  (voice) => {
+    const { low, high } = VOICES[voice];
+    const pcm = held(voice, [(low + high) / 2], 1.2, 6, true);
+    for (const snrDb of [10, 12]) expect(judge(addNoise(pcm, rate, snrDb, createRandom(5))).verdict).toBe("heard");
+  },
+);

@@ -9,7 +9,10 @@ const alto = singPhrase({ ...phraseFor("alto", 5), noiseSnrDb: 30 });
 const report = listenToTake(alto.pcm, rate);
 
 test.each([-20, 20])("a gain of %i dB changes nothing but the levels", (gain) => {
-  const louder = listenToTake(alto.pcm.map((x) => x * 10 ** (gain / 20)), rate);
+  const louder = listenToTake(
+    alto.pcm.map((x) => x * 10 ** (gain / 20)),
+    rate,
+  );
   expect(louder.verdict).toBe(report.verdict);
   expect(louder.range!.lowMidi).toBeCloseTo(report.range!.lowMidi, 2);
   expect(louder.range!.highMidi).toBeCloseTo(report.range!.highMidi, 2);
@@ -46,7 +49,10 @@ test("silence after the singing changes nothing at all", () => {
     longer.set(clean);
     const then = listenToTake(longer, rate);
     expect(then.notes.map((n) => n.midi.toFixed(3))).toEqual(now.notes.map((n) => n.midi.toFixed(3)));
-    expect(then.range).toEqual({ lowMidi: expect.closeTo(now.range!.lowMidi, 3), highMidi: expect.closeTo(now.range!.highMidi, 3) });
+    expect(then.range).toEqual({
+      lowMidi: expect.closeTo(now.range!.lowMidi, 3),
+      highMidi: expect.closeTo(now.range!.highMidi, 3),
+    });
     expect(then.f0.slice(now.f0.length).every((hz) => hz === null)).toBe(true);
   }
 });
@@ -60,10 +66,19 @@ test.each([-5, -2, 3, 7])("the same sound played %i semitones higher has its ran
 
 test("pauses of digital silence, into which the filters ring out, cost no note after them", () => {
   const phrase = phraseFor("alto", 301);
-  const spaced = singPhrase({ ...phrase, consonants: 0, notes: phrase.notes.map((n, k) => (k % 4 === 3 ? { ...n, durationS: n.durationS + 0.9, gapS: 0.9 } : n)) });
+  const spaced = singPhrase({
+    ...phrase,
+    consonants: 0,
+    notes: phrase.notes.map((n, k) => (k % 4 === 3 ? { ...n, durationS: n.durationS + 0.9, gapS: 0.9 } : n)),
+  });
   for (const level of [1, 1e-2]) {
-    const heard = listenToTake(spaced.pcm.map((x) => level * x), rate);
-    const voiced = spaced.truth.f0.filter((hz, k) => hz !== null && spaced.truth.f0[k - 3] && spaced.truth.f0[k + 3] && heard.f0[k]);
+    const heard = listenToTake(
+      spaced.pcm.map((x) => level * x),
+      rate,
+    );
+    const voiced = spaced.truth.f0.filter(
+      (hz, k) => hz !== null && spaced.truth.f0[k - 3] && spaced.truth.f0[k + 3] && heard.f0[k],
+    );
     const whole = spaced.truth.f0.filter((hz, k) => hz !== null && spaced.truth.f0[k - 3] && spaced.truth.f0[k + 3]);
     expect(voiced.length / whole.length).toBeGreaterThan(0.98);
   }
@@ -80,12 +95,18 @@ test("whatever the sound, every number is a number", () => {
       const pcm = new Float32Array(pieces.length * 4000);
       pieces.forEach(({ kind, level }, k) => {
         for (let i = 0; i < 4000; i++) {
-          const x = kind === "noise" ? Math.sin(i * i * 0.37) : kind === "tone" ? Math.sin(i * 0.11) : i === 2000 ? 1 : 0;
+          const x =
+            kind === "noise" ? Math.sin(i * i * 0.37) : kind === "tone" ? Math.sin(i * 0.11) : i === 2000 ? 1 : 0;
           pcm[4000 * k + i] = 10 ** (level / 20) * x;
         }
       });
       const { f0, notes, certainty, tuningCents } = listenToTake(pcm, rate);
-      const numbers = [certainty, tuningCents, ...f0.filter((hz) => hz !== null), ...notes.flatMap((n) => [n.midi, n.steadinessCents, n.levelDb])];
+      const numbers = [
+        certainty,
+        tuningCents,
+        ...f0.filter((hz) => hz !== null),
+        ...notes.flatMap((n) => [n.midi, n.steadinessCents, n.levelDb]),
+      ];
       expect(numbers.filter((x) => !Number.isFinite(x))).toEqual([]);
     }),
     { numRuns: 12, seed: 13 },
@@ -93,7 +114,10 @@ test("whatever the sound, every number is a number", () => {
 });
 
 test("the sample rate of the microphone does not matter: within 10 cents at 16, 44.1 and 48 kHz", () => {
-  const ranges = [16000, 44100, 48000].map((sampleRate) => listenToTake(singPhrase({ ...phraseFor("bass", 4), sampleRate, consonants: 0 }).pcm, sampleRate).range!);
+  const ranges = [16000, 44100, 48000].map(
+    (sampleRate) =>
+      listenToTake(singPhrase({ ...phraseFor("bass", 4), sampleRate, consonants: 0 }).pcm, sampleRate).range!,
+  );
   for (const range of ranges) {
     expect(Math.abs(range.lowMidi - ranges[0]!.lowMidi)).toBeLessThanOrEqual(0.1);
     expect(Math.abs(range.highMidi - ranges[0]!.highMidi)).toBeLessThanOrEqual(0.1);
@@ -115,7 +139,16 @@ test("a singer who is flat throughout keeps the notes' names, and the offset is 
 });
 
 test("vibrato is told with its rate and extent, and the note is its centre", () => {
-  const { pcm } = singPhrase({ notes: [{ midi: 60, durationS: 1.6 }, { midi: 64, durationS: 1.6 }], vibrato: { rateHz: 5.7, extentCents: 80 }, seed: 6, consonants: 0, sampleRate: rate });
+  const { pcm } = singPhrase({
+    notes: [
+      { midi: 60, durationS: 1.6 },
+      { midi: 64, durationS: 1.6 },
+    ],
+    vibrato: { rateHz: 5.7, extentCents: 80 },
+    seed: 6,
+    consonants: 0,
+    sampleRate: rate,
+  });
   const long = listenToTake(pcm, rate).notes.filter((n) => n.end - n.start > 1);
   expect(long).toHaveLength(2);
   for (const [k, note] of long.entries()) {
@@ -128,7 +161,14 @@ test("vibrato is told with its rate and extent, and the note is its centre", () 
 
 test("what is said holds together: comfort in range, estimate around it, quantiles in order", () => {
   const { range, comfort, estimate, tessitura, certainty } = report;
-  const chain = [estimate!.lowMidi, range!.lowMidi, comfort!.lowMidi, comfort!.highMidi, range!.highMidi, estimate!.highMidi];
+  const chain = [
+    estimate!.lowMidi,
+    range!.lowMidi,
+    comfort!.lowMidi,
+    comfort!.highMidi,
+    range!.highMidi,
+    estimate!.highMidi,
+  ];
   expect([...chain].sort((a, b) => a - b)).toEqual(chain);
   const { p5, q1, median, q3, p95 } = tessitura!;
   expect([p5, q1, median, q3, p95].sort((a, b) => a - b)).toEqual([p5, q1, median, q3, p95]);
@@ -138,12 +178,23 @@ test("what is said holds together: comfort in range, estimate around it, quantil
 
 test("the advice is a song for a wide take, the ends for a narrow one, and another line where little was heard", () => {
   const take = (steps: number[], durationS: number, noiseSnrDb = 40) =>
-    listenToTake(singPhrase({ notes: steps.map((step) => ({ midi: 52 + step, durationS })), seed: 9, sampleRate: rate, noiseSnrDb }).pcm, rate);
+    listenToTake(
+      singPhrase({
+        notes: steps.map((step) => ({ midi: 52 + step, durationS })),
+        seed: 9,
+        sampleRate: rate,
+        noiseSnrDb,
+      }).pcm,
+      rate,
+    );
   const wide = take([0, 4, 7, 12, 14, 12, 7, 4, 0, 14, 0, 7], 0.6);
   const narrow = take([0, 2, 4, 5, 4, 2, 0, 5, 4, 0], 0.6);
   const little = take([0, 9, 4], 0.45, 8);
   expect([wide.advice, wide.nextStep]).toEqual(["go-on", "Try it in a song."]);
-  expect([narrow.advice, narrow.nextStep]).toEqual(["hold-ends", expect.stringContaining("hold your lowest and highest")]);
+  expect([narrow.advice, narrow.nextStep]).toEqual([
+    "hold-ends",
+    expect.stringContaining("hold your lowest and highest"),
+  ]);
   expect([little.advice, listenToTake(new Float32Array(rate), rate).advice]).toEqual(["sing-again", "sing-again"]);
 });
 

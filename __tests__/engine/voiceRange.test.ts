@@ -13,8 +13,13 @@ const conditions: Record<string, Partial<PhraseOptions>> = {
   "noise at 10 dB": { noiseSnrDb: 10 },
   fan: { noiseSnrDb: 14, noiseColour: "fan" },
   scoops: { scoopCents: 250 },
-  "echo and everyday noise": { thinMicHz: 180, noiseSnrDb: 20, reverb: 0.25, vibrato: { rateHz: 5.5, extentCents: 35 } },
-  "clipped": { gainDb: 16 },
+  "echo and everyday noise": {
+    thinMicHz: 180,
+    noiseSnrDb: 20,
+    reverb: 0.25,
+    vibrato: { rateHz: 5.5, extentCents: 35 },
+  },
+  clipped: { gainDb: 16 },
   "guitar at -20 dB": { underneath: { pcm: strummedStrings(3, 16000, 9), levelDb: -20 }, noiseSnrDb: 35 },
 };
 

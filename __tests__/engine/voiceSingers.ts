@@ -22,7 +22,11 @@ export function phraseFor(name: SingerName, seed: number): PhraseOptions {
   const notes: PhraseNote[] = Array.from({ length: 14 }, (_, k) => {
     midi = Math.max(bottom, Math.min(top, midi + Math.round(random.normal() * 3.2)));
     const end = k === 4 ? bottom : k === 9 ? top : midi;
-    return { midi: end + offset, durationS: k === 4 || k === 9 ? 0.45 : random.between(0.28, 0.7), levelDb: random.between(-6, 0) };
+    return {
+      midi: end + offset,
+      durationS: k === 4 || k === 9 ? 0.45 : random.between(0.28, 0.7),
+      levelDb: random.between(-6, 0),
+    };
   });
   return { notes, tract, tiltHz, seed, sampleRate: 16000 };
 }

@@ -27,7 +27,30 @@ export function renderChoir(
     const midiPath = join(folder, "tune.mid");
     const wavPath = join(folder, "tune.wav");
     writeFileSync(midiPath, midiBytes(notes, program, padS, gapS));
-    execFileSync("fluidsynth", ["-ni", "-q", "-R", "0", "-C", "0", "-g", "0.8", "-r", String(sampleRate), "-T", "wav", "-O", "s16", "-F", wavPath, SOUND_FONT, midiPath], { stdio: "ignore" });
+    execFileSync(
+      "fluidsynth",
+      [
+        "-ni",
+        "-q",
+        "-R",
+        "0",
+        "-C",
+        "0",
+        "-g",
+        "0.8",
+        "-r",
+        String(sampleRate),
+        "-T",
+        "wav",
+        "-O",
+        "s16",
+        "-F",
+        wavPath,
+        SOUND_FONT,
+        midiPath,
+      ],
+      { stdio: "ignore" },
+    );
     return readWav(wavPath);
   } finally {
     rmSync(folder, { recursive: true });
@@ -35,7 +58,12 @@ export function renderChoir(
 }
 
 /** A one-track MIDI file at one tick a millisecond. */
-function midiBytes(notes: readonly { midi: number; durationS: number }[], program: number, padS: number, gapS: number): Uint8Array {
+function midiBytes(
+  notes: readonly { midi: number; durationS: number }[],
+  program: number,
+  padS: number,
+  gapS: number,
+): Uint8Array {
   const track: number[] = [0, 0xff, 0x51, 3, 0x07, 0xa1, 0x20, 0, 0xc0, program];
   let wait = Math.round(padS * 1000);
   for (const { midi, durationS } of notes) {

@@ -35,13 +35,15 @@ export const claps: SoundMaker = (seed, rate = 44100, durationS = 6) => {
 export const typing: SoundMaker = (seed, rate = 44100, durationS = 6) => {
   const random = createRandom(seed);
   const out = scaled(noise(round(rate * durationS), rate, "pink", random), 0.001);
-  for (let t = 0.2; t < durationS - 0.2; t += random.between(0.06, 0.25)) burst(out, rate, t, 0.004, random.between(0.05, 0.2), random);
+  for (let t = 0.2; t < durationS - 0.2; t += random.between(0.06, 0.25))
+    burst(out, rate, t, 0.004, random.between(0.05, 0.2), random);
   return highPass(out, rate, 500);
 };
 
 function burst(out: Float32Array, rate: number, at: number, decayS: number, level: number, random: Random): void {
   const from = round(at * rate);
-  for (let i = 0; i < decayS * 6 * rate && from + i < out.length; i++) out[from + i]! += level * random.normal() * exp(-i / (decayS * rate));
+  for (let i = 0; i < decayS * 6 * rate && from + i < out.length; i++)
+    out[from + i]! += level * random.normal() * exp(-i / (decayS * rate));
 }
 
 /** A whistled tune between about 800 and 2000 Hz: nearly a pure tone. */
@@ -55,13 +57,21 @@ export const whistle: SoundMaker = (seed, rate = 44100, durationS = 6) => {
     for (let i = round(from * rate); i < (from + 0.4) * rate; i++) {
       const since = i / rate - from;
       phase += (2 * PI * 440 * 2 ** ((midi - 69) / 12) * (1 + 0.003 * sin(35 * since))) / rate;
-      out[i]! += 0.3 * min(1, since / 0.04, (0.4 - since) / 0.04) * (sin(phase) + 0.02 * sin(2 * phase) + 0.02 * random.normal());
+      out[i]! +=
+        0.3 *
+        min(1, since / 0.04, (0.4 - since) / 0.04) *
+        (sin(phase) + 0.02 * sin(2 * phase) + 0.02 * random.normal());
     }
   }
   return out;
 };
 
-const CHORDS = [[43, 47, 50, 55, 59, 67], [48, 52, 55, 60, 64], [50, 57, 62, 66], [40, 47, 52, 55, 59, 64]];
+const CHORDS = [
+  [43, 47, 50, 55, 59, 67],
+  [48, 52, 55, 60, 64],
+  [50, 57, 62, 66],
+  [40, 47, 52, 55, 59, 64],
+];
 
 /** Strummed plucked strings through open chords. */
 export const strummedStrings: SoundMaker = (seed, rate = 44100, durationS = 6) => {
@@ -76,7 +86,15 @@ export const strummedStrings: SoundMaker = (seed, rate = 44100, durationS = 6) =
 };
 
 /** One plucked string: noise in a delay line with a gentle low-pass. @see K. Karplus, A. Strong, Computer Music J. 7(2) 1983 */
-export function pluck(out: Float32Array, rate: number, at: number, midi: number, level: number, lengthS: number, random: Random): void {
+export function pluck(
+  out: Float32Array,
+  rate: number,
+  at: number,
+  midi: number,
+  level: number,
+  lengthS: number,
+  random: Random,
+): void {
   const period = rate / (440 * 2 ** ((midi - 69) / 12));
   const size = floor(period - 0.5);
   const tune = period - 0.5 - size;
@@ -96,7 +114,12 @@ export function pluck(out: Float32Array, rate: number, at: number, midi: number,
 }
 
 /** Speech by the machine's own voice; null where espeak-ng is not installed. */
-export function speech(text: string, voice = "en", wordsPerMinute = 160, pitch = 50): { pcm: Float32Array; sampleRate: number } | null {
+export function speech(
+  text: string,
+  voice = "en",
+  wordsPerMinute = 160,
+  pitch = 50,
+): { pcm: Float32Array; sampleRate: number } | null {
   if (spawnSync("espeak-ng", ["--version"]).status !== 0) return null;
   const folder = mkdtempSync(join(tmpdir(), "speech-"));
   try {

@@ -32,7 +32,8 @@ export function addRoom(sound: Float32Array, rate: number, options: RoomOptions,
   if (options.thinMicHz) out = highPass(highPass(out, rate, options.thinMicHz), rate, options.thinMicHz);
   const heard = rms(out, true);
   if (options.hum) mix(out, hum(out.length, rate, options.hum.hz), heard * 10 ** (options.hum.levelDb / 20));
-  if (options.noiseSnrDb !== undefined) mix(out, noise(out.length, rate, options.noiseColour ?? "pink", random), heard * 10 ** (-options.noiseSnrDb / 20));
+  if (options.noiseSnrDb !== undefined)
+    mix(out, noise(out.length, rate, options.noiseColour ?? "pink", random), heard * 10 ** (-options.noiseSnrDb / 20));
   const gain = 10 ** ((options.gainDb ?? 0) / 20);
   const ceiling = options.clipAt ?? 1;
   return out.map((x) => max(-ceiling, min(ceiling, x * gain)));
@@ -84,7 +85,9 @@ export function noise(length: number, rate: number, colour: "white" | "pink" | "
 /** Mains hum with its overtones. */
 export function hum(length: number, rate: number, hz: number): Float32Array {
   const parts = [1, 0.7, 0.5, 0.2, 0.25, 0.1];
-  return Float32Array.from({ length }, (_, i) => parts.reduce((sum, p, k) => sum + p * sin((2 * PI * hz * (k + 1) * i) / rate + k), 0));
+  return Float32Array.from({ length }, (_, i) =>
+    parts.reduce((sum, p, k) => sum + p * sin((2 * PI * hz * (k + 1) * i) / rate + k), 0),
+  );
 }
 
 /** Second-order high-pass (Butterworth). */
@@ -93,7 +96,10 @@ export function highPass(pcm: Float32Array, rate: number, hz: number): Float32Ar
   const norm = 1 / (1 + Math.SQRT2 * w + w * w);
   const b1 = 2 * (w * w - 1) * norm;
   const b2 = (1 - Math.SQRT2 * w + w * w) * norm;
-  let x1 = 0, x2 = 0, y1 = 0, y2 = 0;
+  let x1 = 0,
+    x2 = 0,
+    y1 = 0,
+    y2 = 0;
   return pcm.map((x) => {
     const y = norm * (x - 2 * x1 + x2) - b1 * y1 - b2 * y2;
     x2 = x1;
@@ -107,7 +113,12 @@ export function highPass(pcm: Float32Array, rate: number, hz: number): Float32Ar
 /** A small live room: four feedback delays side by side. */
 function reverberate(pcm: Float32Array, rate: number, share: number): Float32Array {
   const wet = new Float32Array(pcm.length);
-  for (const [delayS, feedback] of [[0.0297, 0.75], [0.0371, 0.73], [0.0411, 0.71], [0.0437, 0.69]] as const) {
+  for (const [delayS, feedback] of [
+    [0.0297, 0.75],
+    [0.0371, 0.73],
+    [0.0411, 0.71],
+    [0.0437, 0.69],
+  ] as const) {
     const delay = Math.round(delayS * rate);
     const line = new Float32Array(delay);
     for (let i = 0; i < pcm.length; i++) {

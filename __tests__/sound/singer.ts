@@ -101,7 +101,12 @@ function layNotes(notes: PhraseNote[], padS: number, consonants: number, random:
   });
 }
 
-function pitchCurve(sounding: Sounding[], options: PhraseOptions, random: Random, durationS: number): (t: number) => number {
+function pitchCurve(
+  sounding: Sounding[],
+  options: PhraseOptions,
+  random: Random,
+  durationS: number,
+): (t: number) => number {
   const { vibrato, scoopCents = 0 } = options;
   const drift = Array.from({ length: Math.ceil(durationS * 10) + 2 }, () => 0.05 * random.normal());
   const phase = random.between(0, 2 * PI);
@@ -112,12 +117,15 @@ function pitchCurve(sounding: Sounding[], options: PhraseOptions, random: Random
     const before = index > 0 ? sounding[index - 1]! : null;
     const since = t - note.start;
     let midi = note.midi;
-    if (before && before.end >= note.start - 1e-6 && since < 0.06) midi = before.midi + (note.midi - before.midi) * ease(since / 0.06);
+    if (before && before.end >= note.start - 1e-6 && since < 0.06)
+      midi = before.midi + (note.midi - before.midi) * ease(since / 0.06);
     else if (scoopCents > 0 && since < 0.08) midi -= (scoopCents / 100) * (1 - ease(since / 0.08));
     const slot = max(0, t * 10);
     const whole = Math.floor(slot);
     midi += (drift[whole] ?? 0) + ((drift[whole + 1] ?? 0) - (drift[whole] ?? 0)) * (slot - whole);
-    if (vibrato) midi += (vibrato.extentCents / 100) * min(1, max(0, since - 0.1) / 0.2) * sin(2 * PI * vibrato.rateHz * t + phase);
+    if (vibrato)
+      midi +=
+        (vibrato.extentCents / 100) * min(1, max(0, since - 0.1) / 0.2) * sin(2 * PI * vibrato.rateHz * t + phase);
     return midi;
   };
 }
@@ -127,8 +135,22 @@ function ease(x: number): number {
   return c * c * (3 - 2 * c);
 }
 
-function soundVoice(sounding: Sounding[], pitch: (t: number) => number, options: PhraseOptions, random: Random, length: number, rate: number): Float32Array {
-  const { vowels = ["a", "e", "i", "o", "u"], tract = 1, breathDb = -32, jitter = 0.004, shimmer = 0.03, tiltHz = 2500 } = options;
+function soundVoice(
+  sounding: Sounding[],
+  pitch: (t: number) => number,
+  options: PhraseOptions,
+  random: Random,
+  length: number,
+  rate: number,
+): Float32Array {
+  const {
+    vowels = ["a", "e", "i", "o", "u"],
+    tract = 1,
+    breathDb = -32,
+    jitter = 0.004,
+    shimmer = 0.03,
+    tiltHz = 2500,
+  } = options;
   const filter = createVocalTract(rate, tract);
   const out = new Float32Array(length);
   const tilt = Math.exp((-2 * PI * tiltHz) / rate);
@@ -141,7 +163,8 @@ function soundVoice(sounding: Sounding[], pitch: (t: number) => number, options:
   let index = 0;
   for (let i = 0; i < length; i++) {
     const t = i / rate;
-    while (index + 1 < sounding.length && t >= (sounding[index + 1]!.consonantFrom ?? sounding[index + 1]!.start)) index++;
+    while (index + 1 < sounding.length && t >= (sounding[index + 1]!.consonantFrom ?? sounding[index + 1]!.start))
+      index++;
     const note = sounding[index]!;
     if (i % 32 === 0) {
       hz = midiHz(pitch(t));
@@ -162,7 +185,8 @@ function soundVoice(sounding: Sounding[], pitch: (t: number) => number, options:
     }
     source *= loudness;
     soft = tilt * soft + (1 - tilt) * (source + breath * 2 * random.normal());
-    const hiss = note.consonantFrom !== null && t >= note.consonantFrom && t < note.start - 0.005 ? 0.02 * random.normal() : 0;
+    const hiss =
+      note.consonantFrom !== null && t >= note.consonantFrom && t < note.start - 0.005 ? 0.02 * random.normal() : 0;
     out[i] = filter.next(soft * gain) + hiss;
   }
   evenOut(out, sounding, rate);

@@ -31,6 +31,9 @@ export function readWav(path: string): { pcm: Float32Array; sampleRate: number }
   let at = 12;
   while (bytes.toString("latin1", at, at + 4) !== "data") at += 8 + bytes.readUInt32LE(at + 4);
   const size = Math.min(bytes.readUInt32LE(at + 4), bytes.length - at - 8);
-  const pcm = Float32Array.from({ length: Math.floor(size / (2 * channels)) }, (_, i) => bytes.readInt16LE(at + 8 + 2 * channels * i) / 32768);
+  const pcm = Float32Array.from(
+    { length: Math.floor(size / (2 * channels)) },
+    (_, i) => bytes.readInt16LE(at + 8 + 2 * channels * i) / 32768,
+  );
   return { pcm, sampleRate: bytes.readUInt32LE(24) };
 }

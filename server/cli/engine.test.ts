@@ -35,6 +35,10 @@ test("--help tells how every verb is used", () => {
     expect(lines.some((line) => line.split(" ")[0] === verb)).toBe(true);
 }, 60_000);
 
-test.each(["take", "melody", "key"])("a missing file is told in the same words by %s", (verb) => {
-  expect(engine(verb, "x.wav").told).toEqual(["x.wav: there is no such file."]);
-}, 60_000);
+test.each(["take", "melody", "key"])(
+  "a missing file is told in the same words by %s",
+  (verb) => {
+    expect(engine(verb, "x.wav").told).toEqual(["x.wav: there is no such file."]);
+  },
+  60_000,
+);

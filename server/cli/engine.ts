@@ -23,7 +23,10 @@ async function main([name = "", ...args]: string[]): Promise<void> {
     return;
   }
   const verb = Object.hasOwn(verbs, name) ? verbs[name] : undefined;
-  if (!verb) throw new BadInput(`${name ? `There is no verb "${name}".` : "Name a verb."} Verbs: ${Object.keys(verbs).join(", ")}.`);
+  if (!verb)
+    throw new BadInput(
+      `${name ? `There is no verb "${name}".` : "Name a verb."} Verbs: ${Object.keys(verbs).join(", ")}.`,
+    );
   if (args.includes("--help")) {
     process.stdout.write(`${verb.usage}\n`);
     return;

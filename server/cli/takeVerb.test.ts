@@ -12,7 +12,11 @@ import { readWavPcm } from "./wavPcm";
 const folder = mkdtempSync(join(tmpdir(), "take-"));
 afterAll(() => rmSync(folder, { recursive: true }));
 const at = (name: string) => join(folder, name);
-const sung = singPhrase({ notes: [50, 54, 57, 62, 57, 54, 50].map((midi) => ({ midi, durationS: 0.5 })), seed: 3, sampleRate: 16000 });
+const sung = singPhrase({
+  notes: [50, 54, 57, 62, 57, 54, 50].map((midi) => ({ midi, durationS: 0.5 })),
+  seed: 3,
+  sampleRate: 16000,
+});
 
 /** A wav of any format code around raw samples. */
 function wav(code: number, bits: number, channels: number, data: Buffer, extensible = false): Buffer {
@@ -30,14 +34,29 @@ function wav(code: number, bits: number, channels: number, data: Buffer, extensi
     head.writeUInt32LE(body.length, 4);
     return Buffer.concat([head, body, Buffer.alloc(body.length % 2)]);
   };
-  const body = Buffer.concat([Buffer.from("WAVE"), chunk("fmt ", format), chunk("LIST", Buffer.from("odd")), chunk("data", data)]);
+  const body = Buffer.concat([
+    Buffer.from("WAVE"),
+    chunk("fmt ", format),
+    chunk("LIST", Buffer.from("odd")),
+    chunk("data", data),
+  ]);
   return chunk("RIFF", body);
 }
 
 test("prints the range, the comfort and the notes of a recording", async () => {
   writeWav(at("sung.wav"), sung.pcm, 16000);
   const [line] = (await linesOf(takeVerb, [at("sung.wav")])) as Record<string, unknown>[];
-  expect(Object.keys(line!)).toEqual(["file", "verdict", "lowMidi", "highMidi", "comfortLowMidi", "comfortHighMidi", "certainty", "reasons", "notes"]);
+  expect(Object.keys(line!)).toEqual([
+    "file",
+    "verdict",
+    "lowMidi",
+    "highMidi",
+    "comfortLowMidi",
+    "comfortHighMidi",
+    "certainty",
+    "reasons",
+    "notes",
+  ]);
   expect(line).toMatchObject({ file: at("sung.wav"), verdict: "heard" });
   expect(line!["lowMidi"]).toBeCloseTo(50, 0);
   expect(line!["highMidi"]).toBeCloseTo(62, 0);
@@ -46,7 +65,9 @@ test("prints the range, the comfort and the notes of a recording", async () => {
 
 test("--frames adds the pitch of every hundredth of a second, null where there is none", async () => {
   writeWav(at("frames.wav"), sung.pcm, 16000);
-  const [line] = (await linesOf(takeVerb, [at("frames.wav"), "--frames"])) as { f0: { t: number; hz: number | null }[] }[];
+  const [line] = (await linesOf(takeVerb, [at("frames.wav"), "--frames"])) as {
+    f0: { t: number; hz: number | null }[];
+  }[];
   expect(line!.f0).toHaveLength(Math.floor(sung.pcm.length / 160));
   expect(line!.f0[0]).toEqual({ t: 0, hz: null });
   expect(line!.f0[60]!.t).toBe(0.6);
@@ -54,8 +75,18 @@ test("--frames adds the pitch of every hundredth of a second, null where there i
 });
 
 test("a hundred recordings in one call give a line each, in their order", async () => {
-  const low = singPhrase({ notes: [45, 47, 49, 52].map((midi) => ({ midi, durationS: 0.5 })), seed: 4, sampleRate: 8000, padS: 0.1 });
-  const high = singPhrase({ notes: [57, 59, 61, 64].map((midi) => ({ midi, durationS: 0.5 })), seed: 5, sampleRate: 8000, padS: 0.1 });
+  const low = singPhrase({
+    notes: [45, 47, 49, 52].map((midi) => ({ midi, durationS: 0.5 })),
+    seed: 4,
+    sampleRate: 8000,
+    padS: 0.1,
+  });
+  const high = singPhrase({
+    notes: [57, 59, 61, 64].map((midi) => ({ midi, durationS: 0.5 })),
+    seed: 5,
+    sampleRate: 8000,
+    padS: 0.1,
+  });
   const files = Array.from({ length: 100 }, (_, k) => at(`class-${k}.wav`));
   // Few of them sing, so that the hundred are soon heard.
   const singing = (k: number) => (k % 10 === 0 ? low : k % 10 === 3 ? high : null);
@@ -70,7 +101,9 @@ test("a hundred recordings in one call give a line each, in their order", async 
 
 test("silence has a verdict and no numbers", async () => {
   writeWav(at("silence.wav"), new Float32Array(32000), 16000);
-  expect(await linesOf(takeVerb, [at("silence.wav")])).toMatchObject([{ verdict: "too-quiet", lowMidi: null, highMidi: null, comfortLowMidi: null, certainty: 0, notes: [] }]);
+  expect(await linesOf(takeVerb, [at("silence.wav")])).toMatchObject([
+    { verdict: "too-quiet", lowMidi: null, highMidi: null, comfortLowMidi: null, certainty: 0, notes: [] },
+  ]);
 });
 
 test("every kind of PCM and float reads alike, several channels as their mean", () => {
@@ -81,15 +114,52 @@ test("every kind of PCM and float reads alike, several channels as their mean", 
     return data;
   };
   const kinds: Buffer[] = [
-    wav(1, 16, 1, pack(2, (d, v, i) => d.writeInt16LE(v * 32768, i))),
-    wav(1, 24, 1, pack(3, (d, v, i) => d.writeIntLE(v * 8388608, i, 3))),
-    wav(1, 24, 1, pack(3, (d, v, i) => d.writeIntLE(v * 8388608, i, 3)), true),
-    wav(1, 32, 1, pack(4, (d, v, i) => d.writeInt32LE(v * 2147483648, i))),
-    wav(3, 32, 1, pack(4, (d, v, i) => d.writeFloatLE(v, i))),
-    wav(3, 64, 1, pack(8, (d, v, i) => d.writeDoubleLE(v, i)), true),
+    wav(
+      1,
+      16,
+      1,
+      pack(2, (d, v, i) => d.writeInt16LE(v * 32768, i)),
+    ),
+    wav(
+      1,
+      24,
+      1,
+      pack(3, (d, v, i) => d.writeIntLE(v * 8388608, i, 3)),
+    ),
+    wav(
+      1,
+      24,
+      1,
+      pack(3, (d, v, i) => d.writeIntLE(v * 8388608, i, 3)),
+      true,
+    ),
+    wav(
+      1,
+      32,
+      1,
+      pack(4, (d, v, i) => d.writeInt32LE(v * 2147483648, i)),
+    ),
+    wav(
+      3,
+      32,
+      1,
+      pack(4, (d, v, i) => d.writeFloatLE(v, i)),
+    ),
+    wav(
+      3,
+      64,
+      1,
+      pack(8, (d, v, i) => d.writeDoubleLE(v, i)),
+      true,
+    ),
   ];
   for (const bytes of kinds) expect([...readWavPcm("a.wav", bytes).pcm]).toEqual(values);
-  const stereo = wav(3, 32, 2, pack(4, (d, v, i) => d.writeFloatLE(v, i)));
+  const stereo = wav(
+    3,
+    32,
+    2,
+    pack(4, (d, v, i) => d.writeFloatLE(v, i)),
+  );
   expect([...readWavPcm("a.wav", stereo).pcm]).toEqual([0.25, -0.125]);
 });
 

@@ -33,7 +33,7 @@ export function readWavPcm(name: string, bytes: Buffer): Recording {
   if (bytes.length < 12 || bytes.toString("latin1", 0, 4) !== "RIFF" || bytes.toString("latin1", 8, 12) !== "WAVE")
     throw new BadInput(`${name} is not a wav file.`);
   let format: Format | null = null;
-  for (let at = 12; at + 8 <= bytes.length; ) {
+  for (let at = 12; at + 8 <= bytes.length;) {
     const kind = bytes.toString("latin1", at, at + 4);
     const size = bytes.readUInt32LE(at + 4);
     const from = at + 8;
@@ -54,9 +54,16 @@ function readFormat(name: string, chunk: Buffer): Format {
   if (chunk.length < 16) throw new BadInput(`${name} is a broken wav file: its format is cut off.`);
   const tag = chunk.readUInt16LE(0);
   const code = tag === EXTENSIBLE && chunk.length >= 26 ? chunk.readUInt16LE(24) : tag;
-  const format = { code, channels: chunk.readUInt16LE(2), sampleRate: chunk.readUInt32LE(4), bits: chunk.readUInt16LE(14) };
-  const known = (code === PCM && [8, 16, 24, 32].includes(format.bits)) || (code === FLOAT && [32, 64].includes(format.bits));
-  if (!known) throw new BadInput(`${name} is a wav of a kind that is not supported (format ${code}, ${format.bits} bits).`);
+  const format = {
+    code,
+    channels: chunk.readUInt16LE(2),
+    sampleRate: chunk.readUInt32LE(4),
+    bits: chunk.readUInt16LE(14),
+  };
+  const known =
+    (code === PCM && [8, 16, 24, 32].includes(format.bits)) || (code === FLOAT && [32, 64].includes(format.bits));
+  if (!known)
+    throw new BadInput(`${name} is a wav of a kind that is not supported (format ${code}, ${format.bits} bits).`);
   if (format.channels < 1) throw new BadInput(`${name} is a broken wav file: it has no channels.`);
   if (format.sampleRate < 8000 || format.sampleRate > 192000)
     throw new BadInput(`${name} has a sample rate of ${format.sampleRate} Hz; 8000 to 192000 Hz are supported.`);

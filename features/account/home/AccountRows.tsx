@@ -17,7 +17,11 @@ const rows: Row[] = [
   { href: "/account/security" as Href, label: "Signing in", hint: "E-mail address, password, codes" },
   { href: "/account/sessions" as Href, label: "Sessions", hint: "Where you are signed in" },
   { href: "/account/mail" as Href, label: "Mail", hint: "Which mails you get" },
-  { href: "/account/sharing" as Href, label: "What teachers see", hint: "What you agreed to, to take back at any time" },
+  {
+    href: "/account/sharing" as Href,
+    label: "What teachers see",
+    hint: "What you agreed to, to take back at any time",
+  },
   { href: "/account/data" as Href, label: "Your data", hint: "About you, take it along, erase it" },
 ];
 

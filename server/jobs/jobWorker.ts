@@ -36,7 +36,10 @@ export async function startWorker(connectionString: string, jobs: Jobs, logger: 
   return { stop: () => (stopping ??= runner.stop().catch((error: unknown) => logger.warn(error))) };
 }
 
-/** Does what is due now, and returns. */
+/**
+ * Does what is due now, and returns when how each job ended is noted. That is noted in batches, for which the library waits;
+ * one by one it would not.
+ */
 export async function workOffQueue(pgPool: Pool, jobs: Jobs): Promise<void> {
   await runOnce({
     pgPool,
@@ -44,6 +47,7 @@ export async function workOffQueue(pgPool: Pool, jobs: Jobs): Promise<void> {
     taskList: taskList(jobs),
     noHandleSignals: true,
     logger: silent,
+    preset: { worker: { completeJobBatchDelay: 0, failJobBatchDelay: 0 } },
   });
 }
 

@@ -96,6 +96,7 @@ function TakeCard({ take, comments, onTime, now }: TakeCardProps) {
           </Text>
           {mine && (
             <AskedTwice
+              flush
               label="Take it back"
               question="Take this recording back?"
               text="It leaves the thread at once and is deleted from the storage."

@@ -1,4 +1,5 @@
 import type { Page } from "playwright-core";
+import { answered } from "./answered";
 import type { Viewport } from "./browser";
 import { faultsInEveryLook, type Screen } from "./screenFaults";
 import { signInAsMaren } from "./signIn";
@@ -12,9 +13,7 @@ async function asMaren(viewport: Viewport) {
   const { page } = profile;
   await signInAsMaren(page, "/songs");
   await page.getByText("Lantern on the Slipway").waitFor();
-  const songs = (await page.evaluate(
-    "fetch('/api/auth/refresh', { method: 'POST' }).then((r) => r.json()).then(({ accessToken }) => fetch('/api/songs', { headers: { authorization: `Bearer ${accessToken}` } })).then((r) => r.json())",
-  )) as { id: string; title: string }[];
+  const songs = await answered<{ id: string; title: string }[]>(page, "/songs");
   const ferry = songs.find(({ title }) => title === "The Half-Past-Nine Ferry");
   if (!ferry) throw new Error("The demonstration has no ferry.");
   return { ...profile, ferry: ferry.id };

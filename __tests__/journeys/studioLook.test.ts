@@ -1,16 +1,10 @@
 import type { Page } from "playwright-core";
+import { answered } from "./answered";
 import { faultsInEveryLook, type Screen } from "./screenFaults";
 import { signInAsMaren, signInAsRuth } from "./signIn";
 import { setStage } from "./stage";
 
 const stage = setStage("kept");
-
-/** What the server answers whoever is signed in on this page. */
-function answered<T>(page: Page, path: string): Promise<T> {
-  return page.evaluate(
-    `fetch('/api/auth/refresh', { method: 'POST' }).then((r) => r.json()).then(({ accessToken }) => fetch('/api${path}', { headers: { authorization: 'Bearer ' + accessToken } })).then((r) => r.json())`,
-  );
-}
 
 const text = (words: string) => (page: Page) => page.getByText(words).first().waitFor();
 

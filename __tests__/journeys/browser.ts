@@ -13,14 +13,8 @@ export type Microphone = { wav: string } | "none" | "refused";
  */
 const without = [
   ...["PreloadTopChromeWebUI", "WebUIOmniboxPopup", "WebUIOmniboxAimPopup", "WebUIOmniboxFullPopup", "AimEnabled"],
-  ...["AvoidUnnecessaryBeforeUnloadCheckSync", "DestroyProfileOnBrowserClose", "HttpsUpgrades"],
-  ...[
-    "HttpsFirstBalancedModeAutoEnable",
-    "LensOverlay",
-    "MediaRouter",
-    "PaintHolding",
-    "ThirdPartyStoragePartitioning",
-  ],
+  ...["AvoidUnnecessaryBeforeUnloadCheckSync", "DestroyProfileOnBrowserClose", "HttpsUpgrades", "LensOverlay"],
+  ...["HttpsFirstBalancedModeAutoEnable", "MediaRouter", "PaintHolding", "ThirdPartyStoragePartitioning"],
   ...["AvoidCorsURLLoaderRestartOnRedirect", "OptimizationHints", "NetworkTimeServiceQuerying", "PreconnectToSearch"],
 ];
 const quiet = [

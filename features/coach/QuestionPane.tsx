@@ -85,15 +85,7 @@ export function QuestionPane({ question, instrument, onAnother }: QuestionPanePr
       )}
       {question.kind !== "neck" && answer}
       {verdict?.right === true && (
-        <Button
-          kind="text"
-          small
-          icon="again"
-          label="Ask another one"
-          onPress={onAnother}
-          testID="another"
-          style={{ alignSelf: "flex-start", marginLeft: -8 }}
-        />
+        <Button kind="text" small icon="again" label="Ask another one" onPress={onAnother} testID="another" flush />
       )}
     </View>
   );

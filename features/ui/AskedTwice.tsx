@@ -19,7 +19,7 @@ export interface AskedTwiceProps {
   /** "Delete it" and "Keep it" unless something else is asked */
   confirmLabel?: string;
   keepLabel?: string;
-  /** where it stands under text, so that its own edge is the text's */
+  /** of the button, as `ButtonLook.flush` */
   flush?: boolean;
   /** what asks, where it is no plain button */
   opener?: (ask: () => void) => ReactNode;
@@ -55,13 +55,14 @@ export function AskedTwice({
   };
   if (!asked)
     return (
-      <div ref={opener} style={flush ? { alignSelf: "flex-start", marginLeft: -8 } : undefined}>
+      <div ref={opener}>
         {shownOpener ? (
           shownOpener(() => setAsked(true))
         ) : (
           <Button
             kind="text"
             small
+            flush={flush}
             {...(icon === null ? null : { icon })}
             {...(accessibleName === undefined ? null : { accessibleName })}
             label={label}

@@ -14,12 +14,18 @@ export interface ButtonLook {
   disabled?: boolean;
   /** 48 high instead of 56 */
   small?: boolean;
+  /** stands at the left under text, its label's edge at the text's */
+  flush?: boolean;
 }
 
 /** The box of a button or of a link that looks like one: 56 high with corners of 14 on the phone, a pill of 48 on wider screens. */
-export function buttonBox({ kind = "primary", small, disabled }: Omit<ButtonLook, "label">, layout: Layout): ViewStyle {
+export function buttonBox(
+  { kind = "primary", small, flush, disabled }: Omit<ButtonLook, "label">,
+  layout: Layout,
+): ViewStyle {
   const text = kind === "text";
   const phone = layout === "phone";
+  const side = text ? 8 : 20;
   return {
     flexDirection: "row",
     alignItems: "center",
@@ -27,12 +33,13 @@ export function buttonBox({ kind = "primary", small, disabled }: Omit<ButtonLook
     minHeight: text || small || !phone ? sizes.target : 56,
     minWidth: sizes.target,
     borderRadius: phone ? sizes.radius : 999,
-    paddingHorizontal: text ? 8 : 20,
+    paddingHorizontal: side,
     paddingVertical: 8,
     backgroundColor: kind === "primary" ? (disabled ? colors.line : colors.plum) : "transparent",
     borderWidth: kind === "secondary" ? 1.5 : 0,
     borderStyle: "solid",
     borderColor: disabled ? colors.line : colors.plum,
+    ...(flush && { alignSelf: "flex-start", marginLeft: -side }),
   };
 }
 

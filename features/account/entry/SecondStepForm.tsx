@@ -43,9 +43,14 @@ export function SecondStepForm({ entry }: { entry: ReturnType<typeof useEntry> }
           busyLabel={movingWords(entry.entering, entry.progress) ?? "Signing in"}
         />
       </Form>
-      <View style={{ alignSelf: "flex-start", marginLeft: -8 }}>
-        <Button kind="text" small label="Back to the password" onPress={() => entry.back()} testID="back-to-password" />
-      </View>
+      <Button
+        kind="text"
+        flush
+        small
+        label="Back to the password"
+        onPress={() => entry.back()}
+        testID="back-to-password"
+      />
     </View>
   );
 }

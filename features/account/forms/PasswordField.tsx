@@ -12,15 +12,14 @@ export function PasswordField<Values extends FieldValues>(props: Omit<FormFieldP
   return (
     <View>
       <FormField {...props} secure={!shown} />
-      <View style={{ alignSelf: "flex-start", marginLeft: -8 }}>
-        <Button
-          kind="text"
-          small
-          label={shown ? `Hide ${which}` : `Show ${which}`}
-          onPress={() => setShown(!shown)}
-          testID={`show-${props.testID ?? "password"}`}
-        />
-      </View>
+      <Button
+        kind="text"
+        flush
+        small
+        label={shown ? `Hide ${which}` : `Show ${which}`}
+        onPress={() => setShown(!shown)}
+        testID={`show-${props.testID ?? "password"}`}
+      />
     </View>
   );
 }

@@ -1,5 +1,4 @@
 import { useState } from "react";
-import { View } from "react-native";
 import { http } from "@/features/api/httpClient";
 import { Form } from "@/features/ui/Form";
 import { LinkButton } from "@/features/ui/LinkButton";
@@ -40,9 +39,7 @@ export function ForgottenForm() {
         )}
         <FormEnd {...end} sendLabel={sentTo === null ? "Send the link" : "Send it once more"} busyLabel="Sending" />
       </Form>
-      <View style={{ alignSelf: "flex-start", marginLeft: -8 }}>
-        <LinkButton kind="text" small label="Back to sign in" href="/account/sign-in" />
-      </View>
+      <LinkButton kind="text" flush small label="Back to sign in" href="/account/sign-in" />
     </NarrowCard>
   );
 }

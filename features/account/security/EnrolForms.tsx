@@ -11,11 +11,7 @@ import { KnownPasswordField } from "../forms/PasswordField";
 import { useServerForm } from "@/features/api/useServerForm";
 
 export function NotNow({ onBack }: { onBack: () => void }) {
-  return (
-    <View style={{ alignSelf: "flex-start", marginLeft: -8 }}>
-      <Button kind="text" small label="Not now" onPress={onBack} testID="not-now" />
-    </View>
-  );
+  return <Button kind="text" flush small label="Not now" onPress={onBack} testID="not-now" />;
 }
 
 /** First the password, so that nobody at an unlocked device switches codes on. */

@@ -100,7 +100,7 @@ export function StringFields({ string, index, count, units, errors, onChange, on
             expanded={false}
             onPress={() => setOpen(true)}
             testID={`more-${index}`}
-            style={{ alignSelf: "flex-start", marginLeft: -8 }}
+            flush
           />
         )}
         {shown && (

@@ -103,7 +103,7 @@ export function KeyList({ rows, voice, selected, onSelect, markOf, pinned }: Key
         expanded={all}
         onPress={() => setAll(!all)}
         testID="all-keys"
-        style={{ alignSelf: "flex-start", marginLeft: -8 }}
+        flush
       />
     </View>
   );

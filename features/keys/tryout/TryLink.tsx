@@ -28,7 +28,7 @@ export function TryLink({ songId, of, shift, beside, again = false, kind = "seco
         href={{ pathname: "/songs/[id]/try", params: { id: songId, key: of.tonic, shift: String(shift) } }}
         label={`Try it ${again ? "again " : ""}in ${glyphs(keySign(of))}`}
         testID="try-it"
-        {...(kind === "text" ? { style: { alignSelf: "flex-start", marginLeft: -8 } } : null)}
+        flush={kind === "text"}
       />
       {beside}
     </>

@@ -124,13 +124,7 @@ export function BeatStep({ state, dispatch, clock }: StepProps) {
         </View>
       </View>
       {taps.length > 0 && (
-        <Button
-          kind="text"
-          small
-          label="Begin the taps anew"
-          onPress={() => dispatch({ kind: "forgetTaps" })}
-          style={{ alignSelf: "flex-start", marginLeft: -8 }}
-        />
+        <Button kind="text" small label="Begin the taps anew" onPress={() => dispatch({ kind: "forgetTaps" })} flush />
       )}
     </View>
   );

@@ -1,5 +1,4 @@
 import { useState } from "react";
-import { View } from "react-native";
 import { http } from "@/features/api/httpClient";
 import { useServerForm } from "@/features/api/useServerForm";
 import { Button } from "@/features/ui/Button";
@@ -37,9 +36,7 @@ export function GroupForm({ studioId, pupils, group, onDone }: GroupFormProps) {
       <FormField form={form} name="name" label="Name of the group" check={checkName} testID="group-name" />
       <PupilTicks label="Who is in it" pupils={pupils} chosen={chosen} onChosen={setChosen} />
       <FormEnd small {...end} sendLabel="Keep the group" busyLabel="Keeping it" testID="keep-group" />
-      <View style={{ alignSelf: "flex-start", marginLeft: -8 }}>
-        <Button kind="text" small label="Leave it as it is" onPress={onDone} />
-      </View>
+      <Button kind="text" flush small label="Leave it as it is" onPress={onDone} />
     </Form>
   );
 }

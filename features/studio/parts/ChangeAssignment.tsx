@@ -1,5 +1,4 @@
 import { useState } from "react";
-import { View } from "react-native";
 import { http } from "@/features/api/httpClient";
 import { useServerForm } from "@/features/api/useServerForm";
 import { Button } from "@/features/ui/Button";
@@ -27,16 +26,15 @@ export function ChangeAssignment({ path, dueOn, note }: ChangeAssignmentProps) {
   });
   if (!open)
     return (
-      <View style={{ alignSelf: "flex-start", marginLeft: -8 }}>
-        <Button
-          kind="text"
-          small
-          icon="edit"
-          label="Change due date or note"
-          onPress={() => setOpen(true)}
-          testID="change-assignment"
-        />
-      </View>
+      <Button
+        kind="text"
+        flush
+        small
+        icon="edit"
+        label="Change due date or note"
+        onPress={() => setOpen(true)}
+        testID="change-assignment"
+      />
     );
   return (
     <Card style={{ maxWidth: 560 }}>

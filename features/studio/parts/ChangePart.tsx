@@ -33,16 +33,15 @@ export function ChangePart(props: ChangePartProps) {
   if (!piece) return null;
   if (!open)
     return (
-      <View style={{ alignSelf: "flex-start", marginLeft: -8 }}>
-        <Button
-          kind="text"
-          small
-          icon="edit"
-          label="Change key, way or note"
-          onPress={() => setOpen(true)}
-          testID="change-part"
-        />
-      </View>
+      <Button
+        kind="text"
+        flush
+        small
+        icon="edit"
+        label="Change key, way or note"
+        onPress={() => setOpen(true)}
+        testID="change-part"
+      />
     );
   return (
     <Card style={{ gap: 12 }}>

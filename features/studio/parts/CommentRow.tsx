@@ -42,17 +42,16 @@ export function CommentRow({ partId, comment, now }: CommentRowProps) {
       </View>
       <Text style={{ overflowWrap: "anywhere", whiteSpace: "pre-wrap" } as object}>{text}</Text>
       {mine && (
-        <View style={{ alignSelf: "flex-start", marginLeft: -8 }}>
-          <Button
-            kind="text"
-            small
-            label="Take back"
-            accessibleName={`Take back: ${text.slice(0, 40)}`}
-            busy={remove.isPending}
-            onPress={() => remove.mutate()}
-            testID="remove-comment"
-          />
-        </View>
+        <Button
+          kind="text"
+          flush
+          small
+          label="Take back"
+          accessibleName={`Take back: ${text.slice(0, 40)}`}
+          busy={remove.isPending}
+          onPress={() => remove.mutate()}
+          testID="remove-comment"
+        />
       )}
       {remove.error && <Notice kind="error">{remove.error.message}</Notice>}
     </View>

@@ -59,7 +59,7 @@ export function GuidedPaused({ state: { run, next, cause }, onTell }: GuidedPaus
           icon="again"
           label="Start anew instead"
           onPress={() => onTell({ kind: "leave" })}
-          style={{ alignSelf: "flex-start", marginLeft: -8 }}
+          flush
           testID="guided-anew"
         />
       </View>

@@ -34,7 +34,7 @@ export function WhyNotes({ profile, takes }: WhyNotesProps) {
             label={words}
             expanded={open === name}
             onPress={() => setOpen(open === name ? null : name)}
-            style={{ alignSelf: "flex-start", marginLeft: -8 }}
+            flush
             testID={`why-${name}`}
           />
           {open === name && (

@@ -44,7 +44,7 @@ export function TrendPicture({ takes }: TrendPictureProps) {
         label="The same as a table"
         expanded={asTable}
         onPress={() => setAsTable(!asTable)}
-        style={{ alignSelf: "flex-start", marginLeft: -8 }}
+        flush
         testID="trend-as-table"
       />
       {asTable && <TrendTable points={[...all].reverse()} />}

@@ -84,14 +84,7 @@ export function ChooseRecording({ waiting, unread, onBack, onChoose }: ChooseRec
               kind="good"
               title="What was heard is still here"
               action={
-                <Button
-                  kind="text"
-                  small
-                  label="Back to what was heard"
-                  onPress={onBack}
-                  style={{ alignSelf: "flex-start", marginLeft: -8 }}
-                  testID="upload-back"
-                />
+                <Button kind="text" small label="Back to what was heard" onPress={onBack} flush testID="upload-back" />
               }
             >
               It stays until another recording is read.

@@ -98,7 +98,7 @@ export function TrySetUp(props: TrySetUpProps) {
                 small
                 href={{ pathname: "/songs/[id]/melody", params: { id: song.id } }}
                 label="Put in the tune"
-                style={{ alignSelf: "flex-start", marginLeft: -8 }}
+                flush
               />
             }
           >

@@ -56,7 +56,7 @@ export function RightHandCard({ pattern, metre, onChange }: RightHandCardProps) 
         expanded={open}
         onPress={() => setOpen(!open)}
         testID="change-pattern"
-        style={{ alignSelf: "flex-start", marginLeft: -8 }}
+        flush
       />
       {open && <PatternGrid steps={pattern.steps} metre={metre} onChange={change} />}
     </Card>

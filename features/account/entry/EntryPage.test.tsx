@@ -226,3 +226,20 @@ it("carries the way back over to the other form", () => {
   open("sign-in", "/songs/7");
   expect(screen.getByRole("link", { name: "Sign up" }).getAttribute("href")).toBe("/account/sign-up?next=%2Fsongs%2F7");
 });
+
+test.each(["sign-up", "sign-in"] as const)("keeps what was typed when a device is turned: %s", (kind) => {
+  const widthWas = window.innerWidth;
+  const turnTo = (width: number) =>
+    act(() => {
+      Object.defineProperty(document.documentElement, "clientWidth", { configurable: true, value: width });
+      window.innerWidth = width;
+      window.dispatchEvent(new Event("resize"));
+    });
+  turnTo(390);
+  open(kind);
+  type("E-mail address", email);
+  type("Password", password);
+  turnTo(1440);
+  expect([value("E-mail address"), value("Password")]).toEqual([email, password]);
+  turnTo(widthWas);
+});

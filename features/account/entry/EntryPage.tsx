@@ -1,11 +1,10 @@
 import { Redirect, type Href } from "expo-router";
 import { View } from "react-native";
 import { useSession } from "@/features/api/SessionProvider";
-import { Card } from "@/features/ui/Card";
 import { LinkButton } from "@/features/ui/LinkButton";
 import { Notice } from "@/features/ui/Notice";
 import { Text } from "@/features/ui/Text";
-import { useLayout } from "@/features/ui/useLayout";
+import { RoomCard } from "../forms/RoomCard";
 import { nextPath } from "./nextPath";
 import { SecondStepForm } from "./SecondStepForm";
 import { SignInForm } from "./SignInForm";
@@ -22,7 +21,6 @@ interface EntryPageProps {
 export function EntryPage({ kind, next }: EntryPageProps) {
   const session = useSession();
   const entry = useEntry(kind);
-  const phone = useLayout() === "phone";
   const target = nextPath(next);
   const query = target === "/" ? "" : `?next=${encodeURIComponent(target)}`;
   if (session.status === "signed-in" && !entry.entering) {
@@ -35,7 +33,9 @@ export function EntryPage({ kind, next }: EntryPageProps) {
   if (entry.asksCode) {
     const step = <SecondStepForm entry={entry} />;
     return (
-      <View style={{ maxWidth: 480, width: "100%" }}>{phone ? step : <Card style={{ padding: 24 }}>{step}</Card>}</View>
+      <View style={{ maxWidth: 480, width: "100%" }}>
+        <RoomCard>{step}</RoomCard>
+      </View>
     );
   }
   const form = up ? <SignUpForm entry={entry} /> : <SignInForm entry={entry} />;
@@ -54,7 +54,7 @@ export function EntryPage({ kind, next }: EntryPageProps) {
           ? "With an account your voices, songs and keys are kept, and you find them on every device you sign in on."
           : "Sign in to find your voices, songs and keys."}
       </Text>
-      {phone ? form : <Card style={{ padding: 24 }}>{form}</Card>}
+      <RoomCard>{form}</RoomCard>
       {up && (
         <Text variant="small" tone="soft">
           We send a link to this address to see that it is yours. If you have an account already and forgot its
